@@ -1,0 +1,85 @@
+package quantity
+
+import (
+	"math"
+	"strconv"
+	"strings"
+)
+
+// Text writes a quantity for people: four significant digits, the usual prefix.
+func Text[Q Number](q Q) string { return q.Dimension().Text(float64(q)) }
+
+// Text writes an SI value of the dimension for people: four significant digits
+// and, where it is usual, an SI prefix; temperatures in degrees Celsius below
+// 1000 K, fractions in per cent or ppm.
+func (d *Dimension) Text(v float64) string {
+	switch {
+	case d == temperature && v < 1000:
+		return significant(v-273.15) + " °C"
+	case d == fraction:
+		return fractionText(v)
+	case d == area:
+		return significant(v*1e6) + " mm2"
+	case d == pressure:
+		return significant(v/100) + " mbar"
+	case d == kermaRate:
+		return significant(v*3600e6) + " µGy/h"
+	case d == humidity:
+		return significant(v*1e3) + " g/m3"
+	case d == perKelvin || d == perVolt:
+		return significant(v*1e6) + " ppm" + d.SI[1:]
+	case !d.prefixed:
+		return significant(v) + " " + d.SI
+	}
+	return engineering(v, d.SI)
+}
+
+// DimensionOf finds the dimension whose results carry the SI unit; nil where none does.
+func DimensionOf(si string) *Dimension {
+	for _, d := range dimensions {
+		if d.SI == si {
+			return d
+		}
+	}
+	return nil
+}
+
+func fractionText(v float64) string {
+	if a := math.Abs(v); a > 0 && a < 1e-3 {
+		return significant(v*1e6) + " ppm"
+	}
+	return significant(v*100) + " %"
+}
+
+func engineering(v float64, base string) string {
+	if v == 0 {
+		return "0 " + base
+	}
+	const names = "fpnum kMGT" // 10^-15 … 10^12
+	step := int(math.Floor(math.Log10(math.Abs(v)*(1+5e-5)) / 3))
+	step = min(max(step, -5), 4)
+	prefix := strings.TrimSpace(names[step+5 : step+6])
+	if prefix == "u" {
+		prefix = "µ"
+	}
+	return significant(v/math.Pow(1000, float64(step))) + " " + prefix + base
+}
+
+// significant writes four significant digits without trailing zeros.
+func significant(v float64) string {
+	a := math.Abs(v)
+	if a != 0 && (a < 1e-3 || a >= 1e5) {
+		return strconv.FormatFloat(v, 'g', 4, 64)
+	}
+	digits := 3
+	if a >= 1 {
+		digits = max(0, 3-int(math.Floor(math.Log10(a))))
+	} else if a > 0 {
+		digits = 3 - int(math.Floor(math.Log10(a)))
+	}
+	s := strconv.FormatFloat(v, 'f', digits, 64)
+	if strings.Contains(s, ".") {
+		s = strings.TrimRight(strings.TrimRight(s, "0"), ".")
+	}
+	return s
+}

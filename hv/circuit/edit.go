@@ -1,0 +1,67 @@
+package circuit
+
+import "slices"
+
+// Open is the circuit without one element or link: the fault of an open part.
+func (c *Circuit) Open(name string) *Circuit {
+	b := c.rebuild()
+	b.elements = slices.DeleteFunc(b.elements, func(e Element) bool { return e.Name == name })
+	b.links = slices.DeleteFunc(b.links, func(l link) bool { return l.name == name })
+	return b.circuit()
+}
+
+// Short is the circuit with one element replaced by an ideal connection.
+func (c *Circuit) Short(name string) *Circuit {
+	e := c.Element(name)
+	if e == nil {
+		panic("circuit: no element " + name)
+	}
+	from, to := e.from, e.to
+	b := c.Open(name).rebuild()
+	b.link(name, from, to)
+	return b.circuit()
+}
+
+// Join is the circuit with an ideal connection between two named nodes.
+func (c *Circuit) Join(name, from, to string) *Circuit {
+	b := c.rebuild()
+	b.link(name, from, to)
+	return b.circuit()
+}
+
+// With is the circuit with one element changed by an edit of its values.
+func (c *Circuit) With(name string, edit func(*Element)) *Circuit {
+	b := c.rebuild()
+	for i := range b.elements {
+		if b.elements[i].Name == name {
+			edit(&b.elements[i])
+		}
+	}
+	return b.circuit()
+}
+
+// Each is the circuit with every element changed by an edit; an element for which
+// the edit reports false is left out.
+func (c *Circuit) Each(edit func(*Element) bool) *Circuit {
+	b := c.rebuild()
+	b.elements = nil
+	for _, e := range c.Elements {
+		if edit(&e) {
+			b.elements = append(b.elements, e)
+		}
+	}
+	return b.circuit()
+}
+
+// Reverse swaps the ends of an element: a diode put in the wrong way round.
+func (c *Circuit) Reverse(name string) *Circuit {
+	return c.With(name, func(e *Element) { e.from, e.to = e.to, e.from })
+}
+
+func (c *Circuit) rebuild() *builder {
+	b := &builder{elements: slices.Clone(c.Elements), names: c.names, links: slices.Clone(c.links), seen: map[string]bool{}, negative: c.Negative}
+	for _, n := range c.names {
+		b.seen[n] = true
+	}
+	return b
+}

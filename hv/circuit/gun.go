@@ -1,0 +1,146 @@
+package circuit
+
+import (
+	"kilovet/hv/chain"
+	"kilovet/hv/document"
+	"kilovet/hv/quantity"
+)
+
+// gun adds bias, control electrode and emission. Without [bias] control electrode
+// and cathode are the output.
+func (m *maker) gun() {
+	if m.chain.Gun == nil && m.chain.Bias == nil {
+		if m.chain.Heater != nil {
+			m.link("cathode lead", "output", "cathode")
+		}
+		return
+	}
+	m.bias()
+	if m.chain.Gun.IsFitted() {
+		// Electrons leave the cathode for the earthed anode: the current flows from anode to cathode.
+		m.add(Element{Name: "gun", Kind: Sink, Role: Load, Current: m.setting.Emission, Place: m.chain.Gun.Here()}, "ground", "cathode")
+	}
+}
+
+func (m *maker) bias() {
+	b := m.chain.Bias
+	if b == nil {
+		m.link("cathode lead", "output", "cathode")
+		m.link("control lead", "output", "control")
+		return
+	}
+	if b.Fed.Or("control") == "control" {
+		m.link("control lead", "output", "control")
+	} else {
+		m.link("cathode lead", "output", "cathode")
+	}
+	if b.Kind.V == "fixed" {
+		m.add(Element{Name: "bias.source", Kind: Source, Role: Series, Permanent: true, Wave: Wave{Direct, b.Voltage.V, 0}, Place: b.Here()}, "cathode", "control")
+	}
+	if b.Resistor != nil {
+		m.resistor("bias.resistor", "cathode", "control", Series, b.Resistor, true)
+	}
+	if b.Bypass != nil {
+		m.capacitor("bias.bypass", "cathode", "control", Shunt, b.Bypass, 0)
+	}
+	if b.Clamp != nil {
+		m.clamp("bias.clamp", "cathode", "control", b.Clamp, true)
+	}
+}
+
+// heater adds the filament, its supply, the centre resistors and the feed.
+func (m *maker) heater() {
+	h := m.chain.Heater
+	if h == nil {
+		return
+	}
+	m.filament(h)
+	m.stray("heater.capacitance_to_ground", "cathode", "ground", h.CapacitanceToGround.V, h.CapacitanceToGround.Place)
+	m.feed(h.Feed)
+}
+
+func (m *maker) filament(h *chain.Heater) {
+	if r := h.CentreResistors; r != nil {
+		m.centre("heater.centre_resistors.1", "heater.a", r.Value.V[0], r)
+		m.centre("heater.centre_resistors.2", "heater.b", r.Value.V[1], r)
+	} else {
+		m.link("heater return", "heater.a", "cathode")
+	}
+	// heater.a is the positive end; an AC heater has no mean, its swing is reckoned apart.
+	wave := Wave{Direct, h.Voltage.V, 0}
+	if h.Supply.V == "ac" {
+		wave = Wave{Sine, rms(h.Voltage.V), h.Frequency.Or(m.mainsFrequency())}
+	}
+	m.add(Element{Name: "heater.supply", Kind: Source, Role: Floating, Permanent: true, Wave: wave, Place: h.Here()}, "heater.a", "heater.b")
+}
+
+func (m *maker) centre(name, end string, value quantity.Resistance, r *chain.CentreResistors) {
+	value *= quantity.Resistance(m.setting.factor(name, r.Tolerance))
+	m.add(Element{Name: name, Kind: Resistor, Role: Floating, Resistance: value, Permanent: true, Place: r.Here()}, end, "cathode")
+}
+
+// feed adds the capacitance of the isolation transformer and the common mode of
+// its earthed side, reduced by a screen.
+func (m *maker) feed(f *chain.Feed) {
+	if f == nil || f.Kind.V == "battery" {
+		return
+	}
+	amplitude := rms(f.CommonMode.V)
+	if f.Screen.V {
+		amplitude /= ScreenFactor
+	}
+	m.add(Element{Name: "mains", Kind: Source, Role: Floating, Permanent: true, Place: f.Here(),
+		Wave: Wave{Sine, amplitude, m.mainsFrequency()}}, "mains", "ground")
+	m.stray("heater.feed", "mains", "cathode", f.Capacitance.V, f.Capacitance.Place)
+}
+
+func (m *maker) mainsFrequency() quantity.Frequency {
+	if m.chain.Site == nil {
+		return 0
+	}
+	return m.chain.Site.MainsFrequency.V
+}
+
+// parts adds the loose parts.
+func (m *maker) parts() {
+	for i := range m.chain.Parts {
+		p := &m.chain.Parts[i]
+		e := Element{Name: "part." + p.Name.V, Role: Series, LoosePart: p, Place: p.Here()}
+		e.Permanent = p.Permanent.Or(p.From.V != "ground" && p.To.V != "ground")
+		if !e.Permanent || p.Kind.V == "meter" {
+			e.Role = Load
+		}
+		m.value(&e, p)
+		m.add(e, p.From.V, p.To.V)
+	}
+}
+
+// value fills in what kind of element a loose part is.
+func (m *maker) value(e *Element, p *chain.Part) {
+	scale := m.setting.factor(e.Name, p.Tolerance)
+	switch p.Kind.V {
+	case "resistor":
+		e.Kind, e.Resistance = Resistor, quantity.Resistance(amount[quantity.Resistance](p.Value)*scale)
+	case "meter":
+		e.Kind, e.Resistance = Resistor, p.Resistance.V
+	case "capacitor":
+		e.Kind, e.Capacitance = Capacitor, quantity.Capacitance(amount[quantity.Capacitance](p.Value)*scale)
+	case "inductor":
+		e.Kind, e.Inductance = Inductor, quantity.Inductance(amount[quantity.Inductance](p.Value)*scale)
+	case "diode":
+		e.Kind = Diode
+		e.Rectifier = Rectifier{Drop: p.ForwardDrop.V, On: p.Resistance.V, Junction: p.Capacitance.V, Leakage: conductance(p.Leakage.V, p.RatedVoltage.V)}
+	default:
+		e.Kind, e.Role, e.Strikes = Gap, Limiter, quantity.Voltage(amount[quantity.Voltage](p.Value))
+	}
+}
+
+// amount reads the value of a loose part; the description was checked when it was read.
+func amount[Q quantity.Number](text document.Given[string]) float64 {
+	var q Q
+	v, err := q.Dimension().Parse(text.V)
+	if err != nil && text.Set() {
+		panic("circuit: unchecked value " + text.V)
+	}
+	return v
+}

@@ -15,21 +15,21 @@ func Text[Q Number](q Q) string { return q.Dimension().Text(float64(q)) }
 func (d *Dimension) Text(v float64) string {
 	switch {
 	case d == temperature && v < 1000:
-		return significant(v-273.15) + " °C"
+		return Significant(v-273.15) + " °C"
 	case d == fraction:
 		return fractionText(v)
 	case d == area:
-		return significant(v*1e6) + " mm2"
+		return Significant(v*1e6) + " mm2"
 	case d == pressure:
-		return significant(v/100) + " mbar"
+		return Significant(v/100) + " mbar"
 	case d == kermaRate:
-		return significant(v*3600e6) + " µGy/h"
+		return Significant(v*3600e6) + " µGy/h"
 	case d == humidity:
-		return significant(v*1e3) + " g/m3"
+		return Significant(v*1e3) + " g/m3"
 	case d == perKelvin || d == perVolt:
-		return significant(v*1e6) + " ppm" + d.SI[1:]
+		return Significant(v*1e6) + " ppm" + d.SI[1:]
 	case !d.prefixed:
-		return significant(v) + " " + d.SI
+		return Significant(v) + " " + d.SI
 	}
 	return engineering(v, d.SI)
 }
@@ -46,9 +46,9 @@ func DimensionOf(si string) *Dimension {
 
 func fractionText(v float64) string {
 	if a := math.Abs(v); a > 0 && a < 1e-3 {
-		return significant(v*1e6) + " ppm"
+		return Significant(v*1e6) + " ppm"
 	}
-	return significant(v*100) + " %"
+	return Significant(v*100) + " %"
 }
 
 func engineering(v float64, base string) string {
@@ -62,11 +62,11 @@ func engineering(v float64, base string) string {
 	if prefix == "u" {
 		prefix = "µ"
 	}
-	return significant(v/math.Pow(1000, float64(step))) + " " + prefix + base
+	return Significant(v/math.Pow(1000, float64(step))) + " " + prefix + base
 }
 
-// significant writes four significant digits without trailing zeros.
-func significant(v float64) string {
+// Significant writes four significant digits without trailing zeros.
+func Significant(v float64) string {
 	a := math.Abs(v)
 	if a != 0 && (a < 1e-3 || a >= 1e5) {
 		return strconv.FormatFloat(v, 'g', 4, 64)

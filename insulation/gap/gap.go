@@ -1,0 +1,79 @@
+package gap
+
+import "kilovet/hv/quantity"
+
+// Gap describes one gap or surface. A zero length, pressure, temperature or count
+// is not given; what may be zero in truth is a pointer, nil where not given.
+type Gap struct {
+	Medium     Medium
+	Insulation Insulation // none: basic
+
+	Clearance quantity.Length // shortest way through the medium; thickness of a solid
+	Creepage  quantity.Length // shortest way along the surface
+	Shape     *Shape          // nil: not known, judged as sharp
+
+	Material string            // of the surface or the solid
+	CTI      *quantity.Voltage // comparative tracking index, in place of a material
+	Board    Board             // printed boards only
+	Ribbed   bool              // a rib of the size Table F.5 asks for breaks the surface
+
+	PollutionDegree int // 1 to 4, IEC 60664-1
+	Altitude        *quantity.Length
+	Temperature     quantity.Temperature // of the gas
+	Pressure        quantity.Pressure    // of the gas as read; none: that of the altitude
+	GaugeFactor     float64              // true pressure over reading; none: 1
+	Humidity        *quantity.Humidity   // absolute; nil: as the data were taken
+	Gas             Gas                  // none: air
+	Surface         Surface              // of the electrodes; none: smooth
+
+	Mains         *Mains // nil: no mains transients reach the gap
+	ImpulseTested bool   // an impulse voltage test of this gap was passed
+}
+
+// Mains is the supply whose transients reach a gap.
+type Mains struct {
+	LineToNeutral quantity.Voltage // rms
+	Category      int              // overvoltage category, 1 to 4
+	Secondary     bool             // the gap is in a circuit behind a transformer, not in the mains itself
+}
+
+// Voltages are the voltages across a gap, magnitudes.
+type Voltages struct {
+	// Peak is the highest recurring or temporary instant value (DC: the DC value).
+	Peak quantity.Voltage
+	// LongTerm is the lasting r.m.s. or DC value; it alone decides creepage.
+	LongTerm quantity.Voltage
+	// RatedImpulse is the 1.2/50 µs impulse the gap must withstand; zero: that of
+	// the gap's mains, and none where it has no mains.
+	RatedImpulse quantity.Voltage
+	// Alternating is the zero-to-peak amplitude of the largest part above 30 kHz, and
+	// Frequency its frequency; zero: none.
+	Alternating quantity.Voltage
+	Frequency   quantity.Frequency
+	// Sharp is the polarity of the more highly stressed electrode.
+	Sharp Polarity
+}
+
+// Class is the insulation class, basic where none is named.
+func (g Gap) Class() Insulation {
+	if g.Insulation == "" {
+		return Basic
+	}
+	return g.Insulation
+}
+
+// Filling is the gas, air where none is named.
+func (g Gap) Filling() Gas {
+	if g.Gas == "" {
+		return AirGas
+	}
+	return g.Gas
+}
+
+// TruePressure is the reading times the gauge factor; zero where not given.
+func (g Gap) TruePressure() quantity.Pressure {
+	if g.GaugeFactor == 0 {
+		return g.Pressure
+	}
+	return g.Pressure * quantity.Pressure(g.GaugeFactor)
+}

@@ -1,0 +1,80 @@
+package digest
+
+import (
+	"cmp"
+	"slices"
+
+	"kilovet/rules/figure"
+	"kilovet/rules/rule"
+)
+
+// Group is the figures that share id, meaning and basis.
+type Group struct {
+	ID, What, Basis string
+	Rows            []Row
+}
+
+// Row is the values of one subject, one for each of the states asked for; a
+// state without a figure is empty.
+type Row struct {
+	Subject string // what belongs to no one part is of the whole chain
+	Values  []string
+}
+
+// whole is the subject of a figure that names none.
+const whole = "whole chain"
+
+// States lists the states the figures know, in the order working, cold, lost and
+// then of appearance; the empty state is not among them.
+func States(figures []figure.Figure) []string {
+	var known, others []string
+	usual := []string{"working", "cold", "lost"}
+	for _, s := range usual {
+		if slices.ContainsFunc(figures, func(f figure.Figure) bool { return f.State == s }) {
+			known = append(known, s)
+		}
+	}
+	for _, f := range figures {
+		if f.State != "" && !slices.Contains(usual, f.State) && !slices.Contains(others, f.State) {
+			others = append(others, f.State)
+		}
+	}
+	return append(known, others...)
+}
+
+// ByState lays out the figures that hold in one of the states.
+func ByState(figures []figure.Figure, states []string) []Group {
+	return groups(figures, states)
+}
+
+// Stateless lays out the figures to which the state does not matter.
+func Stateless(figures []figure.Figure) []Group { return groups(figures, []string{""}) }
+
+func groups(figures []figure.Figure, states []string) []Group {
+	var all []Group
+	for _, f := range figures {
+		column := slices.Index(states, f.State)
+		if column < 0 {
+			continue
+		}
+		i := slices.IndexFunc(all, func(g Group) bool { return g.ID == f.ID && g.What == f.What && g.Basis == f.Basis })
+		if i < 0 {
+			i = len(all)
+			all = append(all, Group{ID: f.ID, What: f.What, Basis: f.Basis})
+		}
+		all[i].put(f, column, len(states))
+	}
+	return all
+}
+
+// put writes a value into the first row of its subject whose place is still free,
+// so that no figure is lost.
+func (g *Group) put(f figure.Figure, column, columns int) {
+	subject := cmp.Or(f.Subject, whole)
+	i := slices.IndexFunc(g.Rows, func(r Row) bool { return r.Subject == subject && r.Values[column] == "" })
+	if i < 0 {
+		i = len(g.Rows)
+		g.Rows = append(g.Rows, Row{subject, make([]string, columns)})
+	}
+	g.Rows[i].Values[column] = Amount(rule.Amount{Value: f.Value, Unit: f.Unit})
+}

@@ -1,0 +1,113 @@
+package digest
+
+import (
+	"fmt"
+	"math"
+	"strconv"
+	"strings"
+
+	"kilovet/hv/quantity"
+	"kilovet/rules"
+	"kilovet/rules/rule"
+)
+
+var signs = strings.NewReplacer("ohm", "Ω", "mm2", "mm²", "m2K2", "m²K²", "m2", "m²", "m3", "m³", "-", "−")
+
+// Amount writes an amount for people: four significant digits, usual prefix. Pure
+// numbers below one are shown as fractions; what is not finite is said to be no
+// number.
+func Amount(a rule.Amount) string {
+	switch {
+	case math.IsNaN(a.Value) || math.IsInf(a.Value, 0):
+		return "no number"
+	case a.Value == 0:
+		a.Value = 0 // a negative nought is a nought
+	case a.Unit == "1" && math.Abs(a.Value) >= 1:
+		return signs.Replace(quantity.Significant(a.Value))
+	}
+	return signs.Replace(a.Text())
+}
+
+// Needed says what a finding needs, as in "at least 125 mm"; empty for a rule of
+// presence and where nothing was assessed.
+func Needed(f rule.Finding) string {
+	if f.Needed == nil {
+		return ""
+	}
+	switch f.Relation {
+	case rule.AtLeast:
+		return "at least " + Amount(*f.Needed)
+	case rule.AtMost:
+		return "at most " + Amount(*f.Needed)
+	}
+	return Amount(*f.Needed)
+}
+
+// Provided says what there is; empty where there is no amount.
+func Provided(f rule.Finding) string {
+	if f.Provided == nil {
+		return ""
+	}
+	return Amount(*f.Provided)
+}
+
+// Margin writes a margin in per cent with its sign; empty where there is none.
+func Margin(f rule.Finding) string {
+	switch {
+	case f.Margin == nil || math.IsNaN(*f.Margin):
+		return ""
+	case math.IsInf(*f.Margin, 1) || *f.Margin >= 100:
+		return "more than a hundredfold"
+	case *f.Margin > 0:
+		return "+" + percent(*f.Margin)
+	}
+	return percent(*f.Margin)
+}
+
+// percent keeps the sign of a deficit too small to show, so that a failure never
+// reads as nought.
+func percent(v float64) string {
+	if v != 0 && math.Abs(v) < 0.0005 {
+		return strings.Replace(fmt.Sprintf("%.1g %%", v*100), "-", "−", 1)
+	}
+	return strings.Replace(strconv.FormatFloat(v*100, 'f', 1, 64)+" %", "-", "−", 1)
+}
+
+// Source writes a source with its mark, and whether it judged.
+func Source(s rule.Source) string {
+	words := []string{string(s.Mark)}
+	if s.Mark == "" {
+		words[0] = "not marked"
+	}
+	if s.Governs {
+		words = append(words, "governs")
+	}
+	return s.Text + " (" + strings.Join(words, "; ") + ")"
+}
+
+// Counts says how many findings there are of each verdict, the worst first.
+func Counts(counts map[rule.Verdict]int) string {
+	var parts []string
+	for _, v := range rule.Verdicts {
+		parts = append(parts, fmt.Sprintf("%s %d", v, counts[v]))
+	}
+	return strings.Join(parts, ", ")
+}
+
+// Place says where in the description the finding's key stands, or that it is
+// not given there.
+func Place(r *rules.Review, f rule.Finding) string {
+	if f.Place.Key == "" || f.Place.Line == 0 {
+		return f.Place.Key
+	}
+	return fmt.Sprintf("%s at %s:%d:%d", f.Place.Key, description(r), f.Place.Line, f.Place.Column)
+}
+
+func description(r *rules.Review) string {
+	for _, in := range r.Inputs {
+		if in.Role == "description" {
+			return in.Name
+		}
+	}
+	return "description"
+}

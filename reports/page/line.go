@@ -1,0 +1,50 @@
+package page
+
+import (
+	"strconv"
+	"strings"
+)
+
+func plain(s string) Line  { return Line{s, Plain} }
+func strong(s string) Line { return Line{s, Strong} }
+func small(s string) Line  { return Line{s, Small} }
+
+// labelled puts a label before a text; an empty text stays empty.
+func labelled(label, s string) Line { return plain(prefixed(label, s)) }
+
+func labelledSmall(label, s string) Line { return small(prefixed(label, s)) }
+
+func prefixed(label, s string) string {
+	if s == "" {
+		return ""
+	}
+	return label + " " + s
+}
+
+// lines is a cell of the lines that are not empty.
+func lines(all ...Line) Cell {
+	var kept []Line
+	for _, l := range all {
+		if strings.TrimSpace(l.Text) != "" {
+			kept = append(kept, l)
+		}
+	}
+	return Cell{Lines: kept}
+}
+
+// shortened cuts a text for the first sheet and shows that it did; the whole of
+// it stands on a later one.
+func shortened(s string) string {
+	r := []rune(s)
+	if len(r) <= mostReason {
+		return s
+	}
+	return strings.TrimSpace(string(r[:mostReason-1])) + "…"
+}
+
+func count(n int, thing string) string {
+	if n == 1 {
+		return "1 " + thing
+	}
+	return strconv.Itoa(n) + " " + thing + "s"
+}

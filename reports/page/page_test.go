@@ -1,0 +1,152 @@
+package page_test
+
+import (
+	"flag"
+	"fmt"
+	"math"
+	"os"
+	"strings"
+	"testing"
+
+	"github.com/google/go-cmp/cmp"
+
+	"kilovet/reports/internal/sample"
+	"kilovet/reports/page"
+	"kilovet/rules"
+)
+
+var update = flag.Bool("update", false, "rewrite the golden files")
+
+// outline writes a document as text, one piece a line.
+func outline(d *page.Document) string {
+	var b strings.Builder
+	fmt.Fprintf(&b, "title block %+v\n", d.Block)
+	for _, s := range d.Sections {
+		fmt.Fprintf(&b, "\nsection %q fresh %t\n", s.Title, s.Fresh)
+		for _, block := range s.Blocks {
+			piece(&b, block)
+		}
+	}
+	return b.String()
+}
+
+func piece(b *strings.Builder, block page.Block) {
+	t, ok := block.(page.Table)
+	if !ok {
+		fmt.Fprintf(b, "  %s %+v\n", strings.TrimPrefix(fmt.Sprintf("%T", block), "page."), block)
+		return
+	}
+	fmt.Fprintf(b, "  Table %+v\n", t.Columns)
+	for _, r := range t.Rows {
+		fmt.Fprintf(b, "    row group %t\n", r.Group)
+		for _, c := range r.Cells {
+			fmt.Fprintf(b, "      | %s", c.Verdict)
+			for _, l := range c.Lines {
+				fmt.Fprintf(b, " [%d %s]", l.Weight, l.Text)
+			}
+			b.WriteByte('\n')
+		}
+	}
+}
+
+func TestGolden(t *testing.T) {
+	const golden = "testdata/failing.txt"
+	got := outline(page.New(sample.Failing()))
+	if *update {
+		if err := os.WriteFile(golden, []byte(got), 0o644); err != nil {
+			t.Fatal(err)
+		}
+	}
+	want, err := os.ReadFile(golden)
+	if err != nil {
+		t.Fatal(err)
+	}
+	if diff := cmp.Diff(string(want), got); diff != "" {
+		t.Error(diff)
+	}
+}
+
+func TestFrontSheetAnswers(t *testing.T) {
+	front := outline(&page.Document{Sections: page.New(sample.Failing()).Sections[:1]})
+	for _, want := range []string{"FAILS", "Do not switch on", "spacing.creepage", "less than the 125 mm", "rating.cable", "drive.peak_limit", sample.Deference, "held at 20 kV"} {
+		if !strings.Contains(front, want) {
+			t.Errorf("%q is not on the front sheet", want)
+		}
+	}
+}
+
+func TestFrontSheetStaysShort(t *testing.T) {
+	front := page.New(sample.Hard()).Sections[0]
+	for _, b := range front.Blocks {
+		if table, ok := b.(page.Table); ok && len(table.Rows) > 7 {
+			t.Errorf("%d rows on the front sheet", len(table.Rows))
+		}
+	}
+	if text := outline(&page.Document{Sections: []page.Section{front}}); !strings.Contains(text, "And 36 rules more") {
+		t.Errorf("the rest is not counted:\n%s", text)
+	}
+}
+
+func TestSheetsHoldEveryFindingFigureAndInput(t *testing.T) {
+	for name, r := range map[string]*rules.Review{"failing": sample.Failing(), "sound": sample.Sound(), "hard": sample.Hard(), "empty": sample.Empty()} {
+		text := outline(page.New(r))
+		for _, want := range names(r) {
+			if !strings.Contains(text, want) {
+				t.Errorf("%s: %q is missing", name, want)
+			}
+		}
+	}
+}
+
+func names(r *rules.Review) []string {
+	all := append([]string{r.Deference, r.Program.Version, "Prepared", "Checked", "Approved"}, r.Assumptions...)
+	for _, f := range r.Findings {
+		all = append(all, f.Rule, f.Subject, f.Because, f.Remedy, f.Under)
+		for _, s := range f.Sources {
+			all = append(all, s.Text, string(s.Mark))
+		}
+	}
+	for _, f := range r.Figures {
+		all = append(all, f.ID, f.Subject, f.State, f.What, f.Basis)
+	}
+	for _, in := range r.Inputs {
+		all = append(all, in.Name, in.SHA256)
+	}
+	for _, c := range r.Cautions {
+		all = append(all, c.Text)
+	}
+	for _, p := range r.PassedOver {
+		all = append(all, p.Rule, p.Because)
+	}
+	return all
+}
+
+func TestEveryRowFitsItsTable(t *testing.T) {
+	for _, s := range page.New(sample.Hard()).Sections {
+		for _, b := range s.Blocks {
+			if table, ok := b.(page.Table); ok {
+				checkTable(t, s.Title, table)
+			}
+		}
+	}
+}
+
+func checkTable(t *testing.T, title string, table page.Table) {
+	t.Helper()
+	sum := 0.0
+	for _, c := range table.Columns {
+		sum += c.Share
+	}
+	if math.Abs(sum-1) > 1e-9 {
+		t.Errorf("%s: the columns share %g of the width", title, sum)
+	}
+	for _, r := range table.Rows {
+		want := len(table.Columns)
+		if r.Group {
+			want = 1
+		}
+		if len(r.Cells) != want {
+			t.Errorf("%s: %d cells in a row, want %d", title, len(r.Cells), want)
+		}
+	}
+}

@@ -1,0 +1,49 @@
+package pdf
+
+import (
+	"fmt"
+
+	"kilovet/reports/page"
+)
+
+// field is one data field of the title block.
+type field struct {
+	label, text string
+	share       float64 // of the width of the frame
+}
+
+// frame draws the border and the title block of a sheet: the data fields of ISO
+// 7200, with blanks to write in where nothing was given.
+func frame(f *fonts, s *sheet, b page.TitleBlock, n, of int) {
+	s.add(box{x: frameLeft, y: frameTop, w: frameRight - frameLeft, h: frameBottom - frameTop, width: 0.5})
+	rows := [][]field{
+		{{"Legal owner", b.Owner, 0.33}, {"Title", b.Title, 0.67}},
+		{{"Creator", b.Creator, 0.28}, {"Approval person", b.Approver, 0.28}, {"Document type", b.DocumentType, 0.24}, {"Date of issue", b.Date, 0.2}},
+		{{"Identification number", b.Document, 0.4}, {"Revision index", b.Revision, 0.16}, {"Made by", b.Program, 0.24}, {"Sheet", fmt.Sprintf("%d of %d", n, of), 0.2}},
+	}
+	high := blockHeight / float64(len(rows))
+	for i, fields := range rows {
+		y := frameBottom - blockHeight + float64(i)*high
+		s.add(stroke{frameLeft, y, frameRight, y, 0.25, 0})
+		x := frameLeft
+		for _, d := range fields {
+			wide := d.share * (frameRight - frameLeft)
+			f.field(s, d, x, y, wide, high)
+			x += wide
+		}
+	}
+}
+
+// field writes a data field under its label: on one line where that does, else
+// smaller on two.
+func (f *fonts) field(s *sheet, d field, x, y, wide, high float64) {
+	if x > frameLeft {
+		s.add(stroke{x, y, x, y + high, 0.15, 0})
+	}
+	s.lines(x+1.2, y+0.6, f.fit(label, d.label, wide-2.4, 1))
+	lines := f.wrap(body, d.text, wide-2.4)
+	if len(lines) > 1 {
+		lines = f.fit(small, d.text, wide-2.4, 2)
+	}
+	s.lines(x+1.2, y+3.4, lines)
+}

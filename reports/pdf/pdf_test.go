@@ -1,0 +1,267 @@
+package pdf
+
+import (
+	"bytes"
+	"compress/zlib"
+	"fmt"
+	"io"
+	"math"
+	"regexp"
+	"strings"
+	"testing"
+	"unicode/utf16"
+
+	"pgregory.net/rapid"
+
+	"kilovet/reports/internal/sample"
+	"kilovet/reports/page"
+	"kilovet/rules"
+)
+
+var samples = map[string]*rules.Review{"failing": sample.Failing(), "sound": sample.Sound(), "empty": sample.Empty(), "hard": sample.Hard(), "nothing": {}}
+
+func testFonts(t testing.TB) *fonts {
+	t.Helper()
+	f, err := newFonts()
+	if err != nil {
+		t.Fatal(err)
+	}
+	return f
+}
+
+func render(t testing.TB, d *page.Document) []byte {
+	t.Helper()
+	out, err := Render(d)
+	if err != nil {
+		t.Fatal(err)
+	}
+	return out
+}
+
+func TestSameDocumentSameBytes(t *testing.T) {
+	first := render(t, page.New(sample.Failing()))
+	for range 4 {
+		if !bytes.Equal(first, render(t, page.New(sample.Failing()))) {
+			t.Fatal("the bytes differ")
+		}
+	}
+}
+
+// place is the rectangle a line of text takes.
+type place struct {
+	left, top, right, bottom float64
+	text                     string
+}
+
+func places(f *fonts, s *sheet) []place {
+	var all []place
+	for _, i := range s.items {
+		if w, ok := i.(written); ok {
+			size := w.style.size * points
+			all = append(all, place{w.x, w.y - 0.76*size, w.x + f.width(w.style, w.text), w.y + 0.22*size, w.text})
+		}
+	}
+	return all
+}
+
+func TestTextNeitherLeavesTheFrameNorCollides(t *testing.T) {
+	f := testFonts(t)
+	for name, r := range samples {
+		for n, s := range layout(f, page.New(r)) {
+			all := places(f, s)
+			for i, p := range all {
+				if p.left < frameLeft || p.right > frameRight || p.top < frameTop || p.bottom > frameBottom {
+					t.Errorf("%s, sheet %d: %q leaves the frame", name, n+1, p.text)
+				}
+				for _, q := range all[:i] {
+					if p.left < q.right && q.left < p.right && p.top < q.bottom && q.top < p.bottom {
+						t.Errorf("%s, sheet %d: %q collides with %q", name, n+1, p.text, q.text)
+					}
+				}
+			}
+		}
+	}
+}
+
+func TestBodyStaysClearOfTheTitleBlock(t *testing.T) {
+	f := testFonts(t)
+	w := &flow{fonts: f}
+	w.turn()
+	for _, s := range page.New(sample.Hard()).Sections {
+		w.section(s)
+	}
+	for n, s := range w.sheets {
+		for _, p := range places(f, s) {
+			if p.bottom > bottom || p.left < left || p.right > right+0.01 {
+				t.Errorf("sheet %d: %q leaves the body", n+1, p.text)
+			}
+		}
+	}
+}
+
+func TestEverySheetBearsItsNumberAndTheTitleBlock(t *testing.T) {
+	f := testFonts(t)
+	for name, r := range samples {
+		sheets := layout(f, page.New(r))
+		for i, s := range sheets {
+			text := strings.Join(words(s), "\n")
+			for _, want := range []string{fmt.Sprintf("%d of %d", i+1, len(sheets)), "Legal owner", "Identification number", "Revision index", "Date of issue", "Title", "Creator", "Approval person", "Document type"} {
+				if !strings.Contains(text, want) {
+					t.Errorf("%s, sheet %d lacks %q", name, i+1, want)
+				}
+			}
+		}
+	}
+}
+
+func words(s *sheet) []string {
+	var all []string
+	for _, i := range s.items {
+		if w, ok := i.(written); ok {
+			all = append(all, w.text)
+		}
+	}
+	return all
+}
+
+func TestFirstSheetAnswers(t *testing.T) {
+	text := strings.Join(words(layout(testFonts(t), page.New(sample.Failing()))[0]), " ")
+	for _, want := range []string{"FAILS", "Do not switch on", "spacing.creepage", "rating.cable", "drive.peak_limit", "Local electrical codes"} {
+		if !strings.Contains(text, want) {
+			t.Errorf("%q is not on the first sheet: %s", want, text)
+		}
+	}
+}
+
+func TestNothingIsLostOnTheWayToTheSheets(t *testing.T) {
+	f := testFonts(t)
+	for name, r := range samples {
+		var all strings.Builder
+		for _, s := range layout(f, page.New(r)) {
+			all.WriteString(squeezed(strings.Join(words(s), "")))
+		}
+		for _, finding := range r.Findings {
+			for _, want := range []string{finding.Rule, finding.Subject, finding.Because, finding.Remedy} {
+				if !strings.Contains(all.String(), squeezed(f.guard(regular, want))) {
+					t.Errorf("%s: %q is missing", name, want)
+				}
+			}
+		}
+	}
+}
+
+// squeezed takes the spaces out, since lines break at them.
+func squeezed(s string) string { return strings.ReplaceAll(s, " ", "") }
+
+func TestTextIsSearchable(t *testing.T) {
+	got := readBack(t, render(t, page.New(sample.Failing())))
+	for _, want := range []string{"spacing.creepage", "60 µA", "−12.0 %", sample.SHA, "1 of "} {
+		if !strings.Contains(got, want) {
+			t.Errorf("%q cannot be read back", want)
+		}
+	}
+}
+
+var (
+	streams = regexp.MustCompile(`(?s)stream\n(.*?)\nendstream`)
+	shown   = regexp.MustCompile(`(?s)\(((?:\\.|[^\\)])*)\) Tj`)
+)
+
+// readBack inflates the streams of a file and collects the text they show, whose
+// codes are UTF-16.
+func readBack(t *testing.T, file []byte) string {
+	t.Helper()
+	var all strings.Builder
+	for _, s := range streams.FindAllSubmatch(file, -1) {
+		reader, err := zlib.NewReader(bytes.NewReader(s[1]))
+		if err != nil {
+			continue
+		}
+		content, err := io.ReadAll(reader)
+		if err != nil {
+			t.Fatal(err)
+		}
+		for _, m := range shown.FindAllSubmatch(content, -1) {
+			all.WriteString(decoded(unescaped(m[1])) + "\n")
+		}
+	}
+	return all.String()
+}
+
+func unescaped(b []byte) []byte {
+	return []byte(strings.NewReplacer(`\\`, `\`, `\(`, `(`, `\)`, `)`, `\r`, "\r").Replace(string(b)))
+}
+
+func decoded(b []byte) string {
+	var codes []uint16
+	for i := 0; i+1 < len(b); i += 2 {
+		codes = append(codes, uint16(b[i])<<8|uint16(b[i+1]))
+	}
+	return string(utf16.Decode(codes))
+}
+
+func TestGuard(t *testing.T) {
+	f := testFonts(t)
+	for _, c := range []struct{ text, want string }{
+		{"µ Ω ≤ ² −", "µ Ω ≤ ² −"},
+		{"\U0001F600", "\ufffd"},
+		{"高压", "\ufffd\ufffd"},
+		{"a\xffb", "a\ufffdb"},
+		{"a\nb", "a b"},
+	} {
+		if got := f.guard(regular, c.text); got != c.want {
+			t.Errorf("%q became %q, want %q", c.text, got, c.want)
+		}
+	}
+}
+
+func TestWrappedLinesFitAndKeepTheText(t *testing.T) {
+	f := testFonts(t)
+	rapid.Check(t, func(t *rapid.T) {
+		s := rapid.StringOf(rapid.RuneFrom([]rune("ab iW._-/高"))).Draw(t, "text")
+		width := rapid.Float64Range(4, 60).Draw(t, "width")
+		var all strings.Builder
+		for _, l := range f.wrap(body, s, width) {
+			if f.width(l.style, l.text) > width+1e-9 {
+				t.Fatalf("%q is wider than %g mm", l.text, width)
+			}
+			all.WriteString(l.text)
+		}
+		if got, want := squeezed(all.String()), squeezed(f.guard(regular, s)); got != want {
+			t.Fatalf("%q became %q", want, got)
+		}
+	})
+}
+
+func TestCutTextShowsIt(t *testing.T) {
+	f := testFonts(t)
+	lines := f.fit(body, strings.Repeat("word ", 50), 30, 2)
+	if len(lines) != 2 || !strings.HasSuffix(lines[1].text, "…") || f.width(body, lines[1].text) > 30 {
+		t.Errorf("got %v", lines)
+	}
+}
+
+func TestACoordinateThatIsNoNumberIsRefused(t *testing.T) {
+	for _, v := range []float64{math.NaN(), math.Inf(1)} {
+		out := blank(testFonts(t), page.TitleBlock{})
+		out.AddPage()
+		s := &sheet{}
+		s.add(stroke{0, 0, v, 1, 0.1, 0})
+		if err := paint(out, s); err == nil {
+			t.Errorf("%g was drawn", v)
+		}
+	}
+}
+
+func TestVerdictsAreToldApartWithoutColour(t *testing.T) {
+	seen := map[string]string{}
+	for _, v := range []string{"meets", "marginal", "unassessed", "fails"} {
+		s := &sheet{}
+		s.mark(verdictOf(v), 0, 0, 20, 5)
+		how := fmt.Sprintf("%+v", s.items)
+		if seen[how] != "" {
+			t.Errorf("%s looks like %s", v, seen[how])
+		}
+		seen[how] = v
+	}
+}

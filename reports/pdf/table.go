@@ -1,0 +1,69 @@
+package pdf
+
+import "kilovet/reports/page"
+
+// gutter is the space between columns, in millimetres.
+const gutter = 2.5
+
+// table sets a table; its column titles stand again on every sheet it goes on to.
+func (w *flow) table(t page.Table) {
+	if len(t.Rows) == 0 {
+		return
+	}
+	w.gap(3)
+	head := func() { w.head(t.Columns) }
+	rows := w.tableRows(t, head)
+	w.room(10 + together(rows, 0))
+	head()
+	for i, r := range rows {
+		w.begin(r, min(together(rows, i), bottom-top-keep))
+		w.row(r)
+	}
+	w.y += 1
+}
+
+// head is the titles of the columns between two lines.
+func (w *flow) head(columns []page.Column) {
+	w.sheet().add(stroke{left, w.y, right, w.y, 0.35, 0})
+	titles := row{pad: 1}
+	x := left
+	for _, c := range columns {
+		titles.cells = append(titles.cells, rowCell{x: x, width: c.Share*across - gutter, lines: w.fit(column, c.Title, c.Share*across-gutter, 2), right: c.Right})
+		x += c.Share * across
+	}
+	w.place(titles)
+	w.sheet().add(stroke{left, w.y, right, w.y, 0.2, 0})
+}
+
+func (w *flow) tableRows(t page.Table, head func()) []row {
+	var rows []row
+	for i, r := range t.Rows {
+		next := i+1 < len(t.Rows) && !t.Rows[i+1].Group
+		rows = append(rows, row{cells: w.tableCells(t.Columns, r), pad: 0.9, ruled: !r.Group || !next, again: head, group: r.Group})
+	}
+	return rows
+}
+
+func (w *flow) tableCells(columns []page.Column, r page.Row) []rowCell {
+	if r.Group {
+		return []rowCell{{x: left, width: across, lines: w.cell(r.Cells[0].Lines, across)}}
+	}
+	var cells []rowCell
+	x := left
+	for i, c := range r.Cells {
+		wide := columns[i].Share*across - gutter
+		cells = append(cells, rowCell{x: x, width: wide, lines: w.cell(c.Lines, wide), right: columns[i].Right, verdict: c.Verdict})
+		x += columns[i].Share * across
+	}
+	return cells
+}
+
+// together is the height that must stay on one sheet: a row, and the one after it
+// if the row is the head of a group.
+func together(rows []row, i int) float64 {
+	h := rows[i].height()
+	if rows[i].group && i+1 < len(rows) {
+		h += rows[i+1].height()
+	}
+	return h
+}

@@ -1,0 +1,135 @@
+package text_test
+
+import (
+	"flag"
+	"os"
+	"regexp"
+	"strings"
+	"testing"
+	"unicode"
+	"unicode/utf8"
+
+	"github.com/google/go-cmp/cmp"
+
+	"kilovet/reports/digest"
+	"kilovet/reports/internal/sample"
+	"kilovet/reports/text"
+	"kilovet/rules"
+)
+
+var update = flag.Bool("update", false, "rewrite the golden files")
+
+var samples = map[string]*rules.Review{"failing": sample.Failing(), "sound": sample.Sound(), "empty": sample.Empty(), "hard": sample.Hard(), "nothing": {}}
+
+func TestGolden(t *testing.T) {
+	for name, o := range map[string]text.Options{"failing_screen": {}, "failing_all": {All: true}} {
+		golden := "testdata/" + name + ".txt"
+		got := text.Render(sample.Failing(), o)
+		if *update {
+			if err := os.WriteFile(golden, got, 0o644); err != nil {
+				t.Fatal(err)
+			}
+		}
+		want, err := os.ReadFile(golden)
+		if err != nil {
+			t.Fatal(err)
+		}
+		if diff := cmp.Diff(string(want), string(got)); diff != "" {
+			t.Errorf("%s: %s", name, diff)
+		}
+	}
+}
+
+func TestNoLineIsWiderThanAskedFor(t *testing.T) {
+	for name, r := range samples {
+		for _, width := range []int{40, 61, 80, 120} {
+			for _, line := range strings.Split(string(text.Render(r, text.Options{All: true, Width: width})), "\n") {
+				if n := utf8.RuneCountInString(line); n > width {
+					t.Errorf("%s at %d columns: %d in %q", name, width, n, line)
+				}
+				if strings.HasSuffix(line, " ") {
+					t.Errorf("%s: space at the end of %q", name, line)
+				}
+			}
+		}
+	}
+}
+
+func TestTheFirstScreenIsOneScreen(t *testing.T) {
+	for name, most := range map[string]int{"failing": 24, "sound": 24, "empty": 24, "hard": 32} {
+		if n := strings.Count(string(text.Render(samples[name], text.Options{})), "\n"); n > most {
+			t.Errorf("%s: %d lines", name, n)
+		}
+	}
+}
+
+func TestTheFirstScreenAnswers(t *testing.T) {
+	got := unwrapped(text.Render(sample.Failing(), text.Options{}))
+	for _, want := range []string{
+		"Thin-film bench", "HV-0042 revision B", "held at 20 kV", "0.42 V peak to peak", "9.8 nm of 12 nm",
+		"FAILS Do not switch on", "fails 1, unassessed 1, marginal 1, meets 2",
+		"life: spacing.creepage: gun feedthrough", "less than the 125 mm", "missing drive.peak_limit", sample.Deference,
+	} {
+		if !strings.Contains(got, want) {
+			t.Errorf("%q is not on the first screen", want)
+		}
+	}
+}
+
+func TestAllHoldsEverything(t *testing.T) {
+	for name, r := range samples {
+		got := unwrapped(text.Render(r, text.Options{All: true, Width: 400}))
+		for _, want := range contents(r) {
+			if !strings.Contains(got, unwrapped([]byte(digest.Clean(want)))) {
+				t.Errorf("%s: %q is missing", name, want)
+			}
+		}
+	}
+}
+
+// contents is every text a review holds, as the terminal is to show it.
+func contents(r *rules.Review) []string {
+	all := []string{r.Deference, r.Program.Version}
+	for _, f := range r.Figures {
+		all = append(all, f.ID, f.Subject, f.State, f.What, f.Basis)
+	}
+	for _, f := range r.Findings {
+		all = append(all, f.Rule, f.Subject, string(f.Verdict), string(f.Concern), f.Because, f.Remedy, f.Under,
+			digest.Needed(f), digest.Provided(f), digest.Margin(f), digest.Place(r, f))
+		all = append(all, f.Missing...)
+		all = append(all, f.Assumptions...)
+		for _, s := range f.Sources {
+			all = append(all, digest.Source(s))
+		}
+	}
+	for _, c := range r.Cautions {
+		all = append(all, c.Subject, c.Text)
+	}
+	for _, p := range r.PassedOver {
+		all = append(all, p.Rule, p.Because)
+	}
+	for _, in := range r.Inputs {
+		all = append(all, in.Role, in.Name, in.SHA256)
+	}
+	return append(all, r.Assumptions...)
+}
+
+func unwrapped(b []byte) string { return strings.Join(strings.Fields(string(b)), " ") }
+
+var colours = regexp.MustCompile("\x1b\\[[0-9;]*m")
+
+func TestColourStandsOnlyBesideWords(t *testing.T) {
+	for name, r := range samples {
+		plain := string(text.Render(r, text.Options{All: true}))
+		coloured := string(text.Render(r, text.Options{All: true, Colour: true}))
+		if diff := cmp.Diff(plain, colours.ReplaceAllString(coloured, "")); diff != "" {
+			t.Errorf("%s: colour changed the words: %s", name, diff)
+		}
+		if strings.ContainsFunc(plain, func(r rune) bool { return r != '\n' && unicode.IsControl(r) }) {
+			t.Errorf("%s: control characters without colour", name)
+		}
+		if len(r.Findings) > 0 && coloured == plain {
+			t.Errorf("%s: no colour where asked for", name)
+		}
+	}
+}

@@ -2,7 +2,11 @@
 // importer of the TOML library: positions, faults and nearest keys come from here.
 package document
 
-import "kilovet/hv/lack"
+import (
+	"reflect"
+
+	"kilovet/hv/lack"
+)
 
 // Place is where something stands in a description. Key is known even where the
 // thing was not given; Line and Column count from one and are zero then.
@@ -38,6 +42,9 @@ func (g Given[T]) Need() (T, error) {
 	}
 	return g.V, lack.Key(g.Key)
 }
+
+// slot opens the leaf to the reader: where the value goes and where its place goes.
+func (g *Given[T]) slot() (reflect.Value, *Place) { return reflect.ValueOf(&g.V).Elem(), &g.Place }
 
 // Table is embedded in every struct that a table of the description fills; its
 // place is that of the table's header or opening brace.

@@ -5,6 +5,7 @@ package quantity
 
 import (
 	"slices"
+	"strconv"
 	"strings"
 )
 
@@ -45,14 +46,16 @@ func (d *Dimension) find(symbol string) (unit, bool) {
 	return d.units[i], true
 }
 
-// otherCase finds the unit that differs from the symbol by upper and lower case
-// only, so that "KV" can be answered with "kV".
-func (d *Dimension) otherCase(symbol string) (string, bool) {
-	i := slices.IndexFunc(d.units, func(u unit) bool { return strings.EqualFold(u.symbol, symbol) })
-	if i < 0 {
-		return "", false
+// otherCase lists the units that differ from the symbol by upper and lower case
+// only, in quotes, so that "mv" can be answered with "mV" or "MV".
+func (d *Dimension) otherCase(symbol string) []string {
+	var right []string
+	for _, u := range d.units {
+		if strings.EqualFold(u.symbol, symbol) {
+			right = append(right, strconv.Quote(u.symbol))
+		}
 	}
-	return d.units[i].symbol, true
+	return right
 }
 
 func decades(base string, prefixes string) []unit {

@@ -17,7 +17,7 @@ type Refusal struct {
 
 func (r *Refusal) Error() string { return r.What + "; " + r.Remedy }
 
-var number = regexp.MustCompile(`^([+-]?(?:\d+(?:\.\d*)?|\.\d+))(?:[eE]([+-]?\d{1,3}))?`)
+var number = regexp.MustCompile(`^([+-]?(?:\d+(?:\.\d*)?|\.\d+))(?:[eE]([+-]?\d+))?`)
 
 // Parse reads "2.2 nF" into SI units. Case matters (mV, MV); µ may be U+00B5,
 // U+03BC or u, ohm may be Ω or ohm; the space may be missing. A decimal comma, a
@@ -29,11 +29,8 @@ func (d *Dimension) Parse(text string) (float64, error) {
 		return 0, d.notANumber(s)
 	}
 	symbol := strings.TrimSpace(s[len(m[0]):])
-	if symbol == "" {
-		return 0, &Refusal{"a number without a unit", d.accepted()}
-	}
-	if symbol[0] == ',' {
-		return 0, &Refusal{"a decimal comma", "write a decimal point, as in " + strconv.Quote(d.Example)}
+	if refusal := d.beforeUnit(m[1], symbol); refusal != nil {
+		return 0, refusal
 	}
 	u, ok := d.find(symbol)
 	if !ok {
@@ -42,18 +39,39 @@ func (d *Dimension) Parse(text string) (float64, error) {
 	return u.value(m[1], m[2], d)
 }
 
+// beforeUnit refuses what follows a number where a unit should; nil where it may be one.
+func (d *Dimension) beforeUnit(mantissa, symbol string) error {
+	switch {
+	case symbol == "" && strings.Trim(mantissa, "+-0.") == "":
+		return &Refusal{"a bare zero", fmt.Sprintf("write it with its unit, as in \"0 %s\"", d.units[0].symbol)}
+	case symbol == "":
+		return &Refusal{"a number without a unit", d.accepted()}
+	case symbol[0] == ',':
+		return &Refusal{"a decimal comma", "write a decimal point, as in " + strconv.Quote(d.Example)}
+	case strings.ContainsAny(symbol[:1], "0123456789_'."):
+		return &Refusal{"a number in groups or with two points", "write the digits without gaps and one decimal point, as in " + strconv.Quote(d.Example)}
+	}
+	return nil
+}
+
 // value joins mantissa and exponent before the one conversion, so that "10 uF"
 // is the float64 nearest to 1e-5.
 func (u unit) value(mantissa, exponent string, d *Dimension) (float64, error) {
 	e := u.exponent
 	if exponent != "" {
-		n, _ := strconv.Atoi(exponent)
-		e += n
+		n, _ := strconv.Atoi(exponent) // out of range: the largest int, refused below
+		e += min(max(n, -9999), 9999)
 	}
 	v, err := strconv.ParseFloat(mantissa+"e"+strconv.Itoa(e), 64)
+	if v == 0 && strings.Trim(mantissa, "+-0.") != "" {
+		return 0, &Refusal{"a number too small to compute with", d.accepted()}
+	}
 	v = v*u.scale + u.offset
 	if err != nil || math.IsInf(v, 0) {
 		return 0, &Refusal{"a number too large to compute with", d.accepted()}
+	}
+	if d == temperature && v < 0 {
+		return 0, &Refusal{"a temperature below absolute zero", d.accepted()}
 	}
 	return v, nil
 }
@@ -67,8 +85,8 @@ func (d *Dimension) notANumber(s string) error {
 }
 
 func (d *Dimension) unknownUnit(symbol string) error {
-	if right, ok := d.otherCase(symbol); ok {
-		return &Refusal{fmt.Sprintf("unit %q", symbol), fmt.Sprintf("upper and lower case matter: write %q", right)}
+	if right := d.otherCase(symbol); len(right) > 0 {
+		return &Refusal{fmt.Sprintf("unknown unit %q", symbol), "upper and lower case matter: write " + strings.Join(right, " or ")}
 	}
 	for _, other := range dimensions {
 		if _, ok := other.find(symbol); ok {

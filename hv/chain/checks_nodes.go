@@ -1,0 +1,138 @@
+package chain
+
+import (
+	"slices"
+	"strings"
+
+	"kilovet/hv/document"
+)
+
+// checkNodes looks up every node that the description names.
+func checkNodes(s *survey) {
+	if !s.legible {
+		return
+	}
+	s.nodes = s.Nodes()
+	for i := range s.Loads {
+		s.node(s.Loads[i].At)
+	}
+	for i := range s.Bleeders {
+		s.node(s.Bleeders[i].At)
+	}
+	if s.Divider != nil {
+		s.node(s.Divider.Senses)
+		if v := s.Divider.Senses.V; v == "divider.tap" || v == "ground" {
+			s.fault(s.Divider.Senses.Place, "the divider cannot sense "+v, `name the node whose voltage it measures, as in senses = "output"`)
+		}
+	}
+	for i := range s.Spacings {
+		sp := &s.Spacings[i]
+		s.node(sp.From)
+		s.node(sp.To)
+		s.eachNode(sp.Also)
+	}
+	if s.Access != nil {
+		s.eachNode(s.Access.Touchable)
+	}
+	for i := range s.Fields {
+		for j := range s.Fields[i].Electrodes {
+			s.node(s.Fields[i].Electrodes[j].Node)
+		}
+	}
+	s.newNodes()
+}
+
+func (s *survey) eachNode(list document.Given[[]string]) {
+	for _, name := range list.V {
+		s.node(document.Given[string]{V: name, Place: list.Place})
+	}
+}
+
+// node reports a name that is no node. Without a multiplier there are hardly any,
+// and what needs them is reported apart.
+func (s *survey) node(name document.Given[string]) {
+	if !s.sound(name.Place) || slices.Contains(s.nodes, name.V) {
+		return
+	}
+	if s.Multiplier == nil {
+		return
+	}
+	s.fault(name.Place, quoted(name.V)+" is no node of this chain", oneOf("node", "", name.V, s.nodes))
+}
+
+// newNodes judges the names that loose parts give to new nodes: none may pass for
+// a node that could exist in another chain, or differ by case alone from one that does.
+func (s *survey) newNodes() {
+	fixed := s.fixedNodes()
+	for i := range s.Parts {
+		p := &s.Parts[i]
+		if p.From.V == p.To.V && s.sound(p.To.Place) {
+			s.fault(p.To.Place, "both ends on the same node", "name the node of the other end")
+		}
+		for _, end := range []document.Given[string]{p.From, p.To} {
+			if !s.sound(end.Place) || slices.Contains(fixed, end.V) {
+				continue
+			}
+			near, ok := document.Nearest(end.V, fixed)
+			switch {
+			case ok && strings.EqualFold(near, end.V):
+				s.fault(end.Place, quoted(end.V)+" differs by upper and lower case only from a node", "write "+quoted(near))
+			case reserved(end.V):
+				s.fault(end.Place, quoted(end.V)+" is no node of this chain, and the name is kept for one", oneOf("node", "", end.V, fixed))
+			}
+		}
+	}
+}
+
+// reserved reports whether a name belongs to the nodes of chains in general.
+func reserved(name string) bool {
+	switch name {
+	case "ground", "mains", "foot", "multiplier", "supply", "output", "control", "cathode":
+		return true
+	}
+	family, _, _ := strings.Cut(name, ".")
+	return slices.Contains([]string{"drive", "coupling", "stage", "filter", "heater", "divider"}, family)
+}
+
+// checkNames looks for things of one kind with the same name, and for parts named like nodes.
+func checkNames(s *survey) {
+	parts := names(s.Parts, func(p *Part) document.Given[string] { return p.Name })
+	s.distinct("load", names(s.Loads, func(l *Load) document.Given[string] { return l.Name }))
+	s.distinct("part", parts)
+	s.distinct("spacing", names(s.Spacings, func(sp *Spacing) document.Given[string] { return sp.Name }))
+	s.distinct("target", names(s.Targets, func(t *Target) document.Given[string] { return t.Name }))
+	s.distinct("shield", names(s.Shields, func(sh *Shield) document.Given[string] { return sh.Name }))
+	s.distinct("field", names(s.Fields, func(f *Field) document.Given[string] { return f.Name }))
+	for i := range s.Fields {
+		s.distinct("probe", names(s.Fields[i].Probes, func(p *Probe) document.Given[string] { return p.Name }))
+		s.distinct("dielectric", names(s.Fields[i].Dielectrics, func(d *Dielectric) document.Given[string] { return d.Name }))
+	}
+	nodes := s.Nodes()
+	for _, p := range parts {
+		if s.sound(p.Place) && slices.Contains(nodes, p.V) {
+			s.fault(p.Place, "a part with the name of a node", "give it a name of its own")
+		}
+	}
+}
+
+func names[T any](things []T, name func(*T) document.Given[string]) []document.Given[string] {
+	all := make([]document.Given[string], len(things))
+	for i := range things {
+		all[i] = name(&things[i])
+	}
+	return all
+}
+
+func (s *survey) distinct(what string, names []document.Given[string]) {
+	first := map[string]document.Place{}
+	for _, n := range names {
+		if !s.sound(n.Place) {
+			continue
+		}
+		if there, twice := first[n.V]; twice {
+			s.fault(n.Place, "a second "+what+" named "+quoted(n.V), "choose another name; the first is on line "+lineOf(there))
+			continue
+		}
+		first[n.V] = n.Place
+	}
+}

@@ -1,0 +1,120 @@
+package chain
+
+import (
+	"slices"
+	"strconv"
+	"strings"
+
+	"kilovet/hv/document"
+	"kilovet/hv/quantity"
+)
+
+func lineOf(p document.Place) string { return strconv.Itoa(p.Line) }
+
+// checkSpacings asks of each spacing for two nodes or a voltage, not both.
+func checkSpacings(s *survey) {
+	for i := range s.Spacings {
+		s.spacingEnds(&s.Spacings[i])
+	}
+}
+
+func (s *survey) spacingEnds(sp *Spacing) {
+	const either = `give from and to, or voltage, as in voltage = "20 kV"`
+	from, to, voltage := sp.From.Set(), sp.To.Set(), sp.Voltage.Set()
+	switch {
+	case voltage && (from || to):
+		s.fault(sp.Voltage.Place, "both nodes and a voltage", "keep from and to, or voltage")
+	case sp.Also.Set() && !from && !to && voltage:
+		s.fault(sp.Also.Place, "further nodes to a spacing that is between none", "give from and to in place of voltage, or leave it out")
+	case from && s.lacks(sp.To.Place):
+		s.fault(sp.From.Place, "from without to", either)
+	case to && s.lacks(sp.From.Place):
+		s.fault(sp.To.Place, "to without from", either)
+	case s.lacks(sp.From.Place) && s.lacks(sp.To.Place) && s.lacks(sp.Voltage.Place):
+		s.fault(sp.Here(), "neither nodes nor a voltage", either)
+	case from && s.without(s.Multiplier != nil, "multiplier"):
+		s.fault(sp.From.Place, "without a multiplier nothing tells the voltage between two nodes", `give voltage in place of from and to, as in voltage = "20 kV"`)
+	case from && sp.From.V == sp.To.V && s.sound(sp.To.Place):
+		s.fault(sp.To.Place, "both sides on the same node", "name the node of the other side")
+	}
+}
+
+// size is one size of a shape.
+type size struct {
+	key   string
+	given document.Given[quantity.Length]
+}
+
+func (sh *Shape) sizes() []size {
+	return []size{{"inner_radius", sh.InnerRadius}, {"outer_radius", sh.OuterRadius}, {"radius", sh.Radius}, {"tip_radius", sh.TipRadius}, {"edge_radius", sh.EdgeRadius}}
+}
+
+// sizesOf are the sizes that each kind of shape has, all needed.
+var sizesOf = map[string][]string{
+	"plates":             {},
+	"coaxial":            {"inner_radius", "outer_radius"},
+	"concentric spheres": {"inner_radius", "outer_radius"},
+	"sphere-plane":       {"radius"},
+	"sphere-sphere":      {"radius"},
+	"cylinder-plane":     {"radius"},
+	"parallel cylinders": {"radius"},
+	"point-plane":        {"tip_radius"},
+	"rounded edge":       {"edge_radius"},
+}
+
+func checkShapes(s *survey) {
+	for i := range s.Spacings {
+		sp := &s.Spacings[i]
+		if sp.Shape == nil || !s.sound(sp.Shape.Kind.Place) {
+			continue
+		}
+		s.shapeSizes(sp.Shape)
+		s.shapeGap(sp)
+	}
+}
+
+func (s *survey) shapeSizes(sh *Shape) {
+	kind := sh.Kind.V
+	wanted := sizesOf[kind]
+	for _, size := range sh.sizes() {
+		belongs := slices.Contains(wanted, size.key)
+		switch {
+		case belongs && s.lacks(size.given.Place):
+			s.fault(sh.Here(), "a shape of kind "+quoted(kind)+" without "+size.key, "give "+size.key+`, as in `+size.key+` = "3 mm"`)
+		case !belongs && size.given.Set():
+			s.fault(size.given.Place, "no size of a shape of kind "+quoted(kind), "sizes of this kind: "+orNone(wanted))
+		}
+	}
+	if sh.Earthed.Set() && kind != "sphere-plane" && kind != "sphere-sphere" {
+		s.fault(sh.Earthed.Place, "only spheres are judged by whether one is earthed", "leave it out")
+	}
+}
+
+func orNone(words []string) string {
+	if len(words) == 0 {
+		return "none"
+	}
+	return strings.Join(words, ", ")
+}
+
+// shapeGap holds the radii of a coaxial or spherical gap against its clearance.
+func (s *survey) shapeGap(sp *Spacing) {
+	inner, outer := sp.Shape.InnerRadius, sp.Shape.OuterRadius
+	if len(sizesOf[sp.Shape.Kind.V]) != 2 || !s.sound(inner.Place) || !s.sound(outer.Place) {
+		return
+	}
+	if quantity.AtLeast(inner.V, outer.V) {
+		s.fault(outer.Place, "the outer radius is not larger than the inner one", "give the outer radius of the gap")
+		return
+	}
+	gap := outer.V - inner.V
+	if s.sound(sp.Clearance.Place) && !near(gap, sp.Clearance.V) {
+		s.fault(sp.Clearance.Place, "the radii of the shape leave a gap of "+quantity.Text(gap), "the clearance is the outer less the inner radius, within 1 %")
+	}
+}
+
+// near reports whether a gap agrees with a clearance within 1 %, common practice of
+// rounding in drawings.
+func near(gap, clearance quantity.Length) bool {
+	return quantity.AtMost(max(gap-clearance, clearance-gap), clearance/100)
+}

@@ -1,0 +1,70 @@
+package chain
+
+import (
+	"fmt"
+	"slices"
+)
+
+// Nodes lists every node of the chain by all its names, from ground upwards, those
+// that parts make last.
+func (c *Chain) Nodes() []string {
+	nodes := c.fixedNodes()
+	for i := range c.Parts {
+		for _, end := range []string{c.Parts[i].From.V, c.Parts[i].To.V} {
+			if end != "" && !slices.Contains(nodes, end) {
+				nodes = append(nodes, end)
+			}
+		}
+	}
+	return nodes
+}
+
+// fixedNodes are the nodes that a chain has without its loose parts.
+func (c *Chain) fixedNodes() []string {
+	nodes := []string{"ground", "mains"}
+	if c.Drive != nil {
+		nodes = append(nodes, "drive")
+	}
+	if c.Multiplier != nil {
+		nodes = append(nodes, c.columnNodes()...)
+		for i := range c.Filters {
+			nodes = append(nodes, fmt.Sprintf("filter.%d", i+1))
+		}
+		nodes = append(nodes, "supply", "output")
+	}
+	if c.Bias != nil || c.Gun != nil {
+		nodes = append(nodes, "control", "cathode")
+	}
+	if c.Heater != nil {
+		nodes = append(nodes, "heater.a", "heater.b")
+		if c.Bias == nil && c.Gun == nil {
+			nodes = append(nodes, "cathode")
+		}
+	}
+	if c.Divider != nil {
+		nodes = append(nodes, "divider.tap")
+	}
+	return nodes
+}
+
+// columnNodes are the nodes of the multiplier from its foot to its top.
+func (c *Chain) columnNodes() []string {
+	m := c.Multiplier
+	columns := []string{"coupling"}
+	var nodes []string
+	if m.Symmetrical() {
+		columns = []string{"coupling.a", "coupling.b"}
+		nodes = append(nodes, "drive.a", "drive.b")
+	}
+	nodes = append(nodes, "foot")
+	for k := 1; k <= min(m.Stages.V, mostStages); k++ {
+		for _, column := range columns {
+			nodes = append(nodes, fmt.Sprintf("%s.%d", column, k))
+		}
+		nodes = append(nodes, fmt.Sprintf("stage.%d", k))
+	}
+	return append(nodes, "multiplier")
+}
+
+// mostStages bounds what an absurd number of stages, refused in reading, can cost.
+const mostStages = 1000

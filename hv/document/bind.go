@@ -1,0 +1,165 @@
+package document
+
+import (
+	"fmt"
+	"reflect"
+	"slices"
+	"strings"
+)
+
+// binder fills a tagged struct from the tree of a document.
+type binder struct {
+	faults Faults
+	top    reflect.Type
+	known  map[reflect.Type][]Declared // of this reading, with paths from the struct itself
+	all    []Declared                  // everything the description may hold, once needed
+}
+
+func (b *binder) fault(code Code, at Place, key, what, remedy string) {
+	b.faults = append(b.faults, Fault{Code: code, Key: key, Line: at.Line, Column: at.Column, What: what, Remedy: remedy})
+}
+
+func (b *binder) declared(t reflect.Type) []Declared {
+	if _, ok := b.known[t]; !ok {
+		b.known[t] = declare(t, "")
+	}
+	return b.known[t]
+}
+
+// table fills a struct from a table and judges the keys of both.
+func (b *binder) table(n *node, into reflect.Value, path string) {
+	if f := into.FieldByName("Table"); f.IsValid() && f.Type() == reflect.TypeFor[Table]() {
+		f.Set(reflect.ValueOf(Table{Place{Key: path, Line: n.place.Line, Column: n.place.Column}}))
+	}
+	before, declared := len(b.faults), b.declared(into.Type())
+	for _, name := range n.names {
+		if !slices.ContainsFunc(declared, func(d Declared) bool { return d.Key == name }) {
+			b.unknown(n, name, path, declared)
+		}
+	}
+	for _, d := range declared {
+		d.Path = join(path, d.Key)
+		child := n.children[d.Key]
+		if child == nil && d.Needed && !n.partial && !b.faults[before:].Meant(d.Path) {
+			b.missing(n, d)
+		}
+		b.field(child, d, into.Field(d.index))
+	}
+}
+
+// field fills one field; without a node it notes the keys of leaves only.
+func (b *binder) field(n *node, d Declared, into reflect.Value) {
+	switch {
+	case d.kind == nil:
+		b.leaf(n, d, into)
+	case n == nil:
+	case d.Holds == OneTable:
+		b.oneTable(n, d, into)
+	default:
+		b.someTables(n, d, into)
+	}
+}
+
+func (b *binder) oneTable(n *node, d Declared, into reflect.Value) {
+	if n.kind != table {
+		b.wrongForm(n, d)
+		for _, item := range n.items {
+			b.stray(item, d)
+		}
+		return
+	}
+	if into.Kind() == reflect.Pointer {
+		into.Set(reflect.New(d.kind))
+		into = into.Elem()
+	}
+	b.table(n, into, d.Path)
+}
+
+func (b *binder) someTables(n *node, d Declared, into reflect.Value) {
+	if n.kind != tables && n.kind != list {
+		b.wrongForm(n, d)
+		b.stray(n, d)
+		return
+	}
+	into.Set(reflect.MakeSlice(into.Type(), len(n.items), len(n.items)))
+	for i, item := range n.items {
+		if item.kind != table {
+			b.fault(Form, item.place, d.Path, describeNode(item)+" where a table is wanted", "write each in braces, as in { key = value }")
+			continue
+		}
+		b.table(item, into.Index(i), d.Path)
+	}
+	if d.Needed && len(n.items) == 0 {
+		b.fault(Length, n.place, d.Path, "an empty list", "give at least one")
+	}
+}
+
+// stray judges the keys of a table that has no field to go to.
+func (b *binder) stray(n *node, d Declared) {
+	if n.kind == table {
+		b.table(n, reflect.New(d.kind).Elem(), d.Path)
+	}
+}
+
+func (b *binder) wrongForm(n *node, d Declared) {
+	switch {
+	case n.kind == illegible: // said already
+	case d.Holds == OneTable && n.kind == tables:
+		b.fault(Form, n.place, d.Path, "there can be only one", "write ["+d.Path+"]")
+	case d.Holds == OneTable:
+		b.fault(Form, n.place, d.Path, describeNode(n)+" where a table is wanted", "write a table: "+d.Key+" = { … } or ["+d.Path+"]")
+	case n.kind == table:
+		b.fault(Form, n.place, d.Path, "one table where there can be several", "write [["+d.Path+"]], or a list "+d.Key+" = [{ … }]")
+	default:
+		b.fault(Form, n.place, d.Path, describeNode(n)+" where a list of tables is wanted", "write [["+d.Path+"]], or a list "+d.Key+" = [{ … }]")
+	}
+}
+
+func (b *binder) missing(n *node, d Declared) {
+	remedy := "add it: " + d.Means
+	if d.kind == nil {
+		remedy = fmt.Sprintf("add %s = %s (%s)", d.Key, d.Sample(), d.Means)
+	}
+	b.fault(Missing, n.place, d.Path, "not given, and "+within(n)+" makes no sense without it", remedy)
+}
+
+func within(n *node) string {
+	if n.headed || n.closed {
+		return "this table"
+	}
+	return "the description"
+}
+
+// unknown reports a key that is not declared, with what was probably meant.
+func (b *binder) unknown(n *node, name, path string, declared []Declared) {
+	accepted := make([]string, len(declared))
+	for i, d := range declared {
+		accepted[i] = d.Key
+	}
+	fault := Fault{Code: Unknown, Key: join(path, brief(name)), Line: n.keys[name].Line, Column: n.keys[name].Column, What: "there is no such key"}
+	if kind := n.children[name].kind; kind == table || kind == tables {
+		fault.What = "there is no such table"
+	}
+	near, ok := Nearest(name, accepted)
+	if ok {
+		fault.Meant = join(path, near)
+	}
+	fault.Remedy = b.suggestion(name, near, ok) + "accepted here: " + strings.Join(accepted, ", ")
+	b.faults = append(b.faults, fault)
+}
+
+func (b *binder) suggestion(name, near string, ok bool) string {
+	switch {
+	case ok && strings.EqualFold(near, name):
+		return fmt.Sprintf("upper and lower case matter: write %q; ", near)
+	case ok:
+		return fmt.Sprintf("was %q meant? ", near)
+	}
+	if b.all == nil {
+		b.all = describe(b.top, "")
+	}
+	if i := slices.IndexFunc(b.all, func(d Declared) bool { return d.Key == name }); i >= 0 {
+		return fmt.Sprintf("it belongs elsewhere, as in %q; ", b.all[i].Path)
+	}
+	return ""
+}

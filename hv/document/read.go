@@ -1,0 +1,55 @@
+package document
+
+import (
+	"fmt"
+	"reflect"
+	"strings"
+	"unicode/utf8"
+)
+
+// largest is the most bytes a description can have.
+const largest = 1 << 20
+
+// Read reads a TOML description into a tagged struct and lists every fault of it
+// in document order. Fields are Given leaves, structs or pointers to structs for
+// tables, and slices of structs for lists of tables; a pointer stays nil where the
+// table is absent. What was given but refused has its place and no usable value,
+// so after any fault the struct serves only to look for more faults.
+func Read(data []byte, into any) Faults {
+	text, unusable := decodeText(data)
+	if unusable != nil {
+		return Faults{*unusable}
+	}
+	root, faults := grow(text)
+	if len(root.names) == 0 && len(faults) == 0 {
+		return Faults{{Code: Empty, Line: 1, Column: 1, What: "the file holds no key", Remedy: "begin with a key, as in format = 1"}}
+	}
+	b := &binder{faults: faults, top: structType(into), known: map[reflect.Type][]Declared{}}
+	b.table(root, reflect.ValueOf(into).Elem(), "")
+	return b.faults.Sorted()
+}
+
+// decodeText makes text of the bytes of a file, or says why they are none.
+func decodeText(data []byte) (string, *Fault) {
+	if len(data) > largest {
+		return "", &Fault{Code: Size, Line: 1, Column: 1, What: fmt.Sprintf("the file has %d bytes", len(data)),
+			Remedy: fmt.Sprintf("a description has at most %d", largest)}
+	}
+	text := strings.TrimPrefix(string(data), "\ufeff")
+	if i := invalid(text); i >= 0 {
+		at := newCursor(text).at(i)
+		return "", &Fault{Code: Encoding, Line: at.Line, Column: at.Column, What: fmt.Sprintf("byte 0x%02x is not UTF-8", text[i]),
+			Remedy: "save the file as UTF-8"}
+	}
+	return text, nil
+}
+
+// invalid is the offset of the first byte that is not UTF-8, −1 where there is none.
+func invalid(text string) int {
+	for i, r := range text {
+		if r == utf8.RuneError && !strings.HasPrefix(text[i:], "\ufffd") {
+			return i
+		}
+	}
+	return -1
+}

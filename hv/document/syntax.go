@@ -1,0 +1,156 @@
+package document
+
+import (
+	"fmt"
+	"regexp"
+	"strings"
+
+	"github.com/BurntSushi/toml"
+)
+
+// decoded is one statement as the TOML library reads it: every key of it in
+// document order, with its whole path, and the values.
+type decoded struct {
+	keys   []toml.Key
+	next   int
+	values map[string]any
+}
+
+// path takes the next key off the list.
+func (d *decoded) path() []string {
+	if d.next >= len(d.keys) {
+		return nil
+	}
+	d.next++
+	return d.keys[d.next-1]
+}
+
+// unreadable is what the TOML library objects to and where in its text.
+type unreadable struct {
+	message string
+	offset  int
+}
+
+var repeatedKey = regexp.MustCompile(`^Key '(.*)' has already been defined`)
+
+// repeated is the path of a key that stands twice in one statement.
+func (u *unreadable) repeated() ([]string, bool) {
+	m := repeatedKey.FindStringSubmatch(u.message)
+	if m == nil {
+		return nil, false
+	}
+	return []string{m[1]}, true
+}
+
+// decode hands one statement to the TOML library. Its panics, which some garbled
+// texts provoke, are errors like any other.
+func decode(text string) (d *decoded, bad *unreadable) {
+	defer func() {
+		if p := recover(); p != nil {
+			d, bad = nil, &unreadable{message: "not TOML"}
+		}
+	}()
+	d = &decoded{}
+	meta, err := toml.Decode(text, &d.values)
+	if parse, ok := err.(toml.ParseError); ok {
+		return nil, &unreadable{parse.Message, parse.Position.Start}
+	} else if err != nil {
+		return nil, &unreadable{message: err.Error()}
+	}
+	d.keys = meta.Keys()
+	return d, nil
+}
+
+var (
+	barePath  = regexp.MustCompile(`^[A-Za-z0-9_-]+(\s*\.\s*[A-Za-z0-9_-]+)*$`)
+	bareValue = regexp.MustCompile(`^(true|false|[+-]?(inf|nan)|0[xob][0-9A-Fa-f_]+|[+-]?\d[\d_]*(\.[\d_]+)?([eE][+-]?\d+)?|\d{4}-\d.*|\d\d:\d\d.*)$`)
+)
+
+// plainPath reads a key without quotes; nil where it is none.
+func plainPath(key string) []string {
+	key = strings.TrimSpace(key)
+	if !barePath.MatchString(key) {
+		return nil
+	}
+	parts := strings.Split(key, ".")
+	for i := range parts {
+		parts[i] = strings.TrimSpace(parts[i])
+	}
+	return parts
+}
+
+// diagnosis says what is wrong with a statement that the TOML library refused, in
+// plain words where the usual slips are recognised.
+func (st statement) diagnosis(text, message string) (what, remedy string) {
+	value := st.entry.value
+	switch first := strings.TrimSpace(text[st.start:st.end]); {
+	case st.kind != pair:
+		return "this header cannot be read", "write [table] or [[table]]"
+	case !strings.Contains(first, "="):
+		return "neither a key with its value, a [table] nor a comment", `write key = value; begin a comment with "#"`
+	case strings.HasPrefix(first, "="):
+		return "a value without a key", "write key = value"
+	case value.end == value.start:
+		return "a key without a value", `write its value after "="`
+	case st.broken && value.opener != 0:
+		return fmt.Sprintf("the bracket %q is not closed or something between is not separated by a comma", string(value.opener)),
+			fmt.Sprintf("close it with %q and separate with commas", closing(value.opener))
+	case st.broken && isQuote(text[value.start]):
+		return "the quotes are not closed", "close them on the same line"
+	}
+	if bare := st.unquoted(text); bare != "" {
+		return fmt.Sprintf("%s stands without quotes", bare), fmt.Sprintf("write %q: texts and quantities stand in quotes", bare)
+	}
+	return "cannot be read (" + message + ")", "texts and quantities stand in quotes, several values in [ ] with commas between"
+}
+
+// unquoted finds the first value that only quotes would make readable.
+func (st statement) unquoted(text string) string {
+	value := st.entry.value
+	if value.opener == 0 && !isQuote(text[value.start]) {
+		line, _, _ := strings.Cut(text[value.start:st.end], "#")
+		if line = strings.TrimSpace(line); !bareValue.MatchString(line) {
+			return brief(line)
+		}
+		return ""
+	}
+	return value.unquoted(text)
+}
+
+func (e element) unquoted(text string) string {
+	if e.opener == 0 {
+		if bare := text[e.start:e.end]; bare != "" && !isQuote(bare[0]) && !bareValue.MatchString(bare) {
+			return brief(bare)
+		}
+		return ""
+	}
+	for _, item := range e.items {
+		if bare := item.unquoted(text); bare != "" {
+			return bare
+		}
+	}
+	for _, inner := range e.entries {
+		if bare := inner.value.unquoted(text); bare != "" {
+			return bare
+		}
+	}
+	return ""
+}
+
+func isQuote(c byte) bool { return c == '"' || c == '\'' }
+
+func closing(opener byte) string {
+	if opener == '[' {
+		return "]"
+	}
+	return "}"
+}
+
+// brief shortens what a message repeats of the input.
+func brief(s string) string {
+	const most = 40
+	if runes := []rune(s); len(runes) > most {
+		return string(runes[:most]) + "…"
+	}
+	return s
+}

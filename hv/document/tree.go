@@ -1,0 +1,209 @@
+package document
+
+import (
+	"fmt"
+	"strings"
+)
+
+// nodeKind is what stands at a key.
+type nodeKind int
+
+const (
+	scalar    nodeKind = iota // one value
+	list                      // values in square brackets
+	table                     // one table
+	tables                    // tables under double-bracket headers
+	illegible                 // something that could not be read
+)
+
+// node is what stands at one key of the document.
+type node struct {
+	kind     nodeKind
+	place    Place  // of the value, the opening bracket or the header; without key
+	raw      string // as it stands in the file
+	value    any    // of a scalar
+	items    []*node
+	names    []string // of the children, in document order
+	children map[string]*node
+	keys     map[string]Place // of the children's keys
+
+	headed  bool // a table under a header of its own
+	closed  bool // a table in braces
+	partial bool // a line of the table could not be read
+}
+
+func (n *node) put(name string, key Place, child *node) {
+	if n.children == nil {
+		n.children, n.keys = map[string]*node{}, map[string]Place{}
+	}
+	n.names = append(n.names, name)
+	n.children[name], n.keys[name] = child, key
+}
+
+// grower grows the tree of a document from its statements.
+type grower struct {
+	text    string
+	cursor  *cursor
+	faults  Faults
+	root    *node
+	context *node  // the table that keys belong to at present
+	path    string // of that table
+}
+
+// grow makes the tree of a text and lists what could not be read.
+func grow(text string) (*node, Faults) {
+	root := &node{kind: table, place: Place{Line: 1, Column: 1}}
+	g := &grower{text: text, cursor: newCursor(text), root: root, context: root}
+	for _, st := range scan(text) {
+		g.statement(st)
+	}
+	return root, g.faults
+}
+
+func (g *grower) fault(code Code, at Place, path []string, what, remedy string) {
+	g.faults = append(g.faults, Fault{Code: code, Key: strings.Join(path, "."), Line: at.Line, Column: at.Column, What: what, Remedy: remedy})
+}
+
+func (g *grower) statement(st statement) {
+	start := g.cursor.at(st.start)
+	if st.deep {
+		g.fault(Nesting, start, nil, "nested too deeply", fmt.Sprintf("at most %d tables or lists within each other", deepest))
+		g.unread(st, start)
+		return
+	}
+	d, bad := decode(g.text[st.start:st.end])
+	switch {
+	case bad != nil:
+		g.syntax(st, bad)
+		g.unread(st, start)
+	case st.kind == pair:
+		g.pair(g.context, st.entry, 0, d, d.values)
+	default:
+		g.header(d.path(), st.kind, start)
+	}
+}
+
+// syntax reports a statement that the TOML library refused.
+func (g *grower) syntax(st statement, bad *unreadable) {
+	at := g.cursor.at(g.objection(st, bad))
+	var key []string
+	if path := plainPath(g.text[st.entry.start:st.entry.end]); st.kind == pair && path != nil {
+		key = g.under(path)
+	}
+	if inner, ok := bad.repeated(); ok {
+		g.fault(Twice, at, g.under(inner), "given a second time between the same braces", "keep one")
+		return
+	}
+	what, remedy := st.diagnosis(g.text, bad.message)
+	g.fault(Syntax, at, key, what, remedy)
+}
+
+// objection is the offset that a fault of syntax points at: for brackets and quotes
+// that are not closed, where they open.
+func (g *grower) objection(st statement, bad *unreadable) int {
+	switch value := st.entry.value; {
+	case st.kind != pair:
+		return st.start
+	case st.broken && value.end > value.start:
+		return value.start
+	}
+	return min(st.start+bad.offset, st.end)
+}
+
+// unread takes from an illegible statement what its key gives away, so that no key
+// is called missing that only could not be read.
+func (g *grower) unread(st statement, start Place) {
+	path := plainPath(g.text[st.entry.start:st.entry.end])
+	switch {
+	case st.kind != pair && path != nil:
+		g.header(path, st.kind, start)
+	case st.kind != pair:
+		g.context = &node{kind: table}
+	case path != nil:
+		g.attach(g.context, path, 0, start, &node{kind: illegible, place: start})
+	default:
+		g.context.partial = true
+	}
+}
+
+// pair adds a key and its value to a table; depth is the number of names in the
+// key's path that lead to the table.
+func (g *grower) pair(into *node, e entry, depth int, d *decoded, values map[string]any) {
+	path, key := d.path(), g.cursor.at(e.start)
+	if len(path) <= depth {
+		g.fault(Syntax, key, nil, "cannot be followed", "write one key = value a line")
+		return
+	}
+	child := g.value(e.value, len(path), d, lookUp(values, path[depth:]))
+	g.attach(into, path, depth, key, child)
+}
+
+func (g *grower) value(e element, depth int, d *decoded, value any) *node {
+	n := &node{place: g.cursor.at(e.start), raw: g.text[e.start:e.end], value: value}
+	switch e.opener {
+	case '[':
+		n.kind = list
+		values, _ := value.([]any)
+		for i, item := range e.items {
+			n.items = append(n.items, g.value(item, depth, d, pick(values, i)))
+		}
+	case '{':
+		n.kind, n.closed = table, true
+		values, _ := value.(map[string]any)
+		for _, inner := range e.entries {
+			g.pair(n, inner, depth, d, values)
+		}
+	}
+	return n
+}
+
+// attach hangs a child into a table under what follows the first depth names of a path.
+func (g *grower) attach(into *node, path []string, depth int, key Place, child *node) {
+	last := len(path) - 1
+	for _, name := range path[depth:last] {
+		next := into.children[name]
+		if next == nil {
+			next = &node{kind: table, place: key}
+			into.put(name, key, next)
+		}
+		if next.kind != table || next.closed {
+			g.twice(key, g.under(path), next)
+			return
+		}
+		into = next
+	}
+	if there := into.children[path[last]]; there != nil {
+		g.twice(key, g.under(path), there)
+		return
+	}
+	into.put(path[last], key, child)
+}
+
+func (g *grower) under(path []string) []string {
+	if g.path == "" {
+		return path
+	}
+	return append([]string{g.path}, path...)
+}
+
+func (g *grower) twice(at Place, path []string, first *node) {
+	g.fault(Twice, at, path, "given a second time", fmt.Sprintf("keep one; the first is on line %d", first.place.Line))
+}
+
+func lookUp(values map[string]any, path []string) any {
+	for i, name := range path {
+		v := values[name]
+		if i == len(path)-1 {
+			return v
+		}
+		values, _ = v.(map[string]any)
+	}
+	return nil
+}
+
+func pick(values []any, i int) any {
+	if i < len(values) {
+		return values[i]
+	}
+	return nil
+}

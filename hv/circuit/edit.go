@@ -1,6 +1,10 @@
 package circuit
 
-import "slices"
+import (
+	"slices"
+
+	"kilovet/hv/quantity"
+)
 
 // Open is the circuit without one element or link: the fault of an open part.
 func (c *Circuit) Open(name string) *Circuit {
@@ -8,6 +12,24 @@ func (c *Circuit) Open(name string) *Circuit {
 	b.elements = slices.DeleteFunc(b.elements, func(e Element) bool { return e.Name == name })
 	b.links = slices.DeleteFunc(b.links, func(l link) bool { return l.name == name })
 	return b.circuit()
+}
+
+// OpenString is the circuit with one element of a resistor open: its string carries
+// nothing any more, the others all. Of a single string nothing is left.
+func (c *Circuit) OpenString(name string) *Circuit {
+	e := c.Element(name)
+	if e == nil {
+		panic("circuit: no element " + name)
+	}
+	strings := 1
+	if e.ResistorPart != nil {
+		_, strings = e.ResistorPart.Elements()
+	}
+	if strings == 1 {
+		return c.Open(name)
+	}
+	rise := quantity.Resistance(strings) / quantity.Resistance(strings-1)
+	return c.With(name, func(e *Element) { e.Resistance *= rise })
 }
 
 // Short is the circuit with one element replaced by an ideal connection.
@@ -59,7 +81,7 @@ func (c *Circuit) Reverse(name string) *Circuit {
 }
 
 func (c *Circuit) rebuild() *builder {
-	b := &builder{elements: slices.Clone(c.Elements), names: c.names, links: slices.Clone(c.links), seen: map[string]bool{}, negative: c.Negative}
+	b := &builder{elements: slices.Clone(c.Elements), names: slices.Clone(c.names), links: slices.Clone(c.links), seen: map[string]bool{}, negative: c.Negative}
 	for _, n := range c.names {
 		b.seen[n] = true
 	}

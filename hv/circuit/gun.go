@@ -3,6 +3,7 @@ package circuit
 import (
 	"kilovet/hv/chain"
 	"kilovet/hv/document"
+	"kilovet/hv/lack"
 	"kilovet/hv/quantity"
 )
 
@@ -106,9 +107,14 @@ func (m *maker) parts() {
 	for i := range m.chain.Parts {
 		p := &m.chain.Parts[i]
 		e := Element{Name: "part." + p.Name.V, Role: Series, LoosePart: p, Place: p.Here()}
-		e.Permanent = p.Permanent.Or(p.From.V != "ground" && p.To.V != "ground")
-		if !e.Permanent || p.Kind.V == "meter" {
+		// What drains a node to ground is a load, and unplugged unless said otherwise.
+		drains := (p.Kind.V == "resistor" || p.Kind.V == "meter") && (p.From.V == "ground" || p.To.V == "ground")
+		e.Permanent = p.Permanent.Or(!drains)
+		switch {
+		case drains:
 			e.Role = Load
+		case p.Kind.V == "capacitor":
+			e.Role = Shunt
 		}
 		m.value(&e, p)
 		m.add(e, p.From.V, p.To.V)
@@ -118,6 +124,7 @@ func (m *maker) parts() {
 // value fills in what kind of element a loose part is.
 func (m *maker) value(e *Element, p *chain.Part) {
 	scale := m.setting.factor(e.Name, p.Tolerance)
+	e.Doubt = unvalued(p)
 	switch p.Kind.V {
 	case "resistor":
 		e.Kind, e.Resistance = Resistor, quantity.Resistance(amount[quantity.Resistance](p.Value)*scale)
@@ -133,6 +140,19 @@ func (m *maker) value(e *Element, p *chain.Part) {
 	default:
 		e.Kind, e.Role, e.Strikes = Gap, Limiter, quantity.Voltage(amount[quantity.Voltage](p.Value))
 	}
+}
+
+// unvalued is the doubt about a part whose value was not given.
+func unvalued(p *chain.Part) *lack.Lack {
+	switch {
+	case p.Kind.V == "diode":
+		return nil
+	case p.Kind.V == "meter" && !p.Resistance.Set():
+		return lack.Key(p.Resistance.Key)
+	case p.Kind.V != "meter" && !p.Value.Set():
+		return lack.Key(p.Value.Key)
+	}
+	return nil
 }
 
 // amount reads the value of a loose part; the description was checked when it was read.

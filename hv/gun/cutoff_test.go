@@ -1,0 +1,103 @@
+package gun_test
+
+import (
+	"math"
+	"testing"
+
+	"kilovet/hv/gun"
+	"kilovet/hv/lack"
+	"kilovet/hv/quantity"
+)
+
+// The tabulated solutions (derived, within 2 %): hole, setback, plate in mm, anode
+// at 10 mm; a flat cathode and a tip of 60 µm.
+var tabulated = []struct{ hole, setback, plate, flat, tip float64 }{
+	{0.5, 0.2, 0, 0.02647, 0.01265},
+	{0.75, 0.3, 0, 0.04042, 0.01801},
+	{0.5, 0.3, 0, 0.0199, 0.00919},
+	{0.5, 0.5, 0, 0.01191, 0.00508},
+	{0.25, 0.3, 0, 0.00463, 0.00216},
+	{0.5, 0.3, 0.1, 0.0121, 0.00554},
+	{0.5, 0.3, 0.2, 0.00753, 0.00342},
+}
+
+func geometry(hole, setback, plate, anode float64, tip gun.Tip) gun.Geometry {
+	return gun.Geometry{ApertureRadius: quantity.Length(hole * 1e-3), Setback: quantity.Length(setback * 1e-3),
+		PlateThickness: quantity.Length(plate * 1e-3), AnodeDistance: quantity.Length(anode * 1e-3), Tip: tip}
+}
+
+func TestCutoffGivesTheTableBack(t *testing.T) {
+	for _, row := range tabulated {
+		for _, c := range []struct {
+			tip  gun.Tip
+			want float64
+		}{{gun.Tip{Flat: true}, row.flat}, {gun.Tip{Radius: 60e-6}, row.tip}} {
+			got, err := geometry(row.hole, row.setback, row.plate, 10, c.tip).Cutoff()
+			if err != nil {
+				t.Fatal(err)
+			}
+			near(t, "cutoff", got.Ratio, c.want, 0.02)
+			if !(got.Low < c.want && c.want < got.High) {
+				t.Errorf("the table's %v lies outside %v", c.want, got)
+			}
+		}
+	}
+}
+
+// Published biases of 200 to 500 V (University of Nebraska and Portland State, read)
+// must lie within what guns of the table have at 20 kV.
+func TestCutoffBracketsPublishedBias(t *testing.T) {
+	low, _ := geometry(0.5, 0.5, 0, 10, gun.Tip{Radius: 60e-6}).Cutoff()
+	high, _ := geometry(0.75, 0.3, 0, 10, gun.Tip{Flat: true}).Cutoff()
+	if !(low.Voltage(20e3) < 200 && high.Voltage(20e3) > 500) {
+		t.Errorf("%v and %v V do not bracket 200 to 500 V", low.Voltage(20e3), high.Voltage(20e3))
+	}
+}
+
+// Laplace's equation knows no length: the whole gun scaled leaves the ratio; a far
+// anode lowers it with its distance; more setback, more plate and a sharper tip too.
+func TestCutoffScalesAndFalls(t *testing.T) {
+	at := func(hole, setback, plate, anode, tip float64) float64 {
+		c, err := geometry(hole, setback, plate, anode, gun.Tip{Radius: quantity.Length(tip * 1e-3)}).Cutoff()
+		if err != nil {
+			t.Fatal(err)
+		}
+		return c.Ratio
+	}
+	base := at(0.5, 0.3, 0.05, 10, 0.06)
+	near(t, "doubled in all lengths", at(1, 0.6, 0.1, 20, 0.12), base, 1e-12)
+	near(t, "anode twice as far", at(0.5, 0.3, 0.05, 20, 0.06), base/2, 1e-12)
+	for what, lower := range map[string]float64{
+		"setback": at(0.5, 0.35, 0.05, 10, 0.06), "plate": at(0.5, 0.3, 0.06, 10, 0.06), "tip": at(0.5, 0.3, 0.05, 10, 0.05),
+	} {
+		if lower >= base {
+			t.Errorf("%s: %v is not below %v", what, lower, base)
+		}
+	}
+	flat, _ := geometry(0.5, 0.3, 0.05, 10, gun.Tip{Flat: true}).Cutoff()
+	if flat.Ratio <= base {
+		t.Error("a flat cathode needs more bias than a tip")
+	}
+}
+
+func TestCutoffOutsideTheTable(t *testing.T) {
+	tip := gun.Tip{Radius: 60e-6}
+	wide := geometry(0.5, 0.3, 0, 10, tip)
+	wide.AnodeApertureRadius = 3e-3
+	for what, g := range map[string]gun.Geometry{
+		"no hole":         geometry(0, 0.3, 0, 10, tip),
+		"no anode":        geometry(0.5, 0.3, 0, 0, tip),
+		"little setback":  geometry(0.5, 0.19, 0, 10, tip),
+		"much setback":    geometry(0.5, 0.61, 0, 10, tip),
+		"protruding":      geometry(0.5, -0.1, 0, 10, tip),
+		"thick plate":     geometry(0.5, 0.3, 0.21, 10, tip),
+		"sharp tip":       geometry(0.5, 0.3, 0, 10, gun.Tip{Radius: 1e-6}),
+		"blunt tip":       geometry(0.5, 0.3, 0, 10, gun.Tip{Radius: 200e-6}),
+		"near anode":      geometry(0.5, 0.3, 0, 5, tip),
+		"wide anode hole": wide,
+		"not a number":    geometry(math.NaN(), 0.3, 0, 10, tip),
+	} {
+		_, err := g.Cutoff()
+		lacking(t, what, err, lack.Outside)
+	}
+}

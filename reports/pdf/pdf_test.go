@@ -68,16 +68,20 @@ func TestTextNeitherLeavesTheFrameNorCollides(t *testing.T) {
 	f := testFonts(t)
 	for name, r := range samples {
 		for n, s := range layout(f, page.New(r)) {
-			all := places(f, s)
-			for i, p := range all {
-				if p.left < frameLeft || p.right > frameRight || p.top < frameTop || p.bottom > frameBottom {
-					t.Errorf("%s, sheet %d: %q leaves the frame", name, n+1, p.text)
-				}
-				for _, q := range all[:i] {
-					if p.left < q.right && q.left < p.right && p.top < q.bottom && q.top < p.bottom {
-						t.Errorf("%s, sheet %d: %q collides with %q", name, n+1, p.text, q.text)
-					}
-				}
+			checkPlaces(t, fmt.Sprintf("%s, sheet %d", name, n+1), places(f, s))
+		}
+	}
+}
+
+func checkPlaces(t *testing.T, where string, all []place) {
+	t.Helper()
+	for i, p := range all {
+		if p.left < frameLeft || p.right > frameRight || p.top < frameTop || p.bottom > frameBottom {
+			t.Errorf("%s: %q leaves the frame", where, p.text)
+		}
+		for _, q := range all[:i] {
+			if p.left < q.right && q.left < p.right && p.top < q.bottom && q.top < p.bottom {
+				t.Errorf("%s: %q collides with %q", where, p.text, q.text)
 			}
 		}
 	}
@@ -264,4 +268,28 @@ func TestVerdictsAreToldApartWithoutColour(t *testing.T) {
 		}
 		seen[how] = v
 	}
+}
+
+// Whatever text a review holds, it is set inside the frame, without collision, in
+// glyphs that there are.
+//
+//	go test -fuzz FuzzSheets ./reports/pdf
+func FuzzSheets(f *testing.F) {
+	f.Add(sample.Foreign, 3)
+	f.Add(sample.LongName, 40)
+	f.Add("\x00\u202e\ud7ff", -1)
+	f.Fuzz(func(t *testing.T, text string, n int) {
+		r := sample.Failing()
+		r.Heading.Title, r.Heading.Approver, r.Deference = text, text, strings.Repeat(text, min(max(n, 0), 50))
+		r.Findings[0].Subject, r.Findings[0].Because, r.Findings[0].Under = text, text, text
+		fonts := testFonts(t)
+		for n, s := range layout(fonts, page.New(r)) {
+			checkPlaces(t, fmt.Sprintf("sheet %d", n+1), places(fonts, s))
+			for _, i := range s.items {
+				if w, ok := i.(written); ok && fonts.guard(w.style.face, w.text) != w.text {
+					t.Errorf("%q was not guarded", w.text)
+				}
+			}
+		}
+	})
 }

@@ -26,6 +26,8 @@ const (
 	mostAgainst  = 4
 	mostSubjects = 3
 	mostMissing  = 6
+
+	mostDeference = 3 // lines
 )
 
 // gutter is the column that labels and verdicts stand in.
@@ -58,7 +60,17 @@ func first(w *writer, r *rules.Review) {
 		w.short("missing", gutter, missing, 2)
 	}
 	w.blank()
-	w.wrap(r.Deference)
+	deferring(w, r.Deference)
+}
+
+// deferring says what comes before the review: in full where all is shown, its
+// beginning on the one screen.
+func deferring(w *writer, s string) {
+	if w.all {
+		w.wrap(s)
+		return
+	}
+	w.short("", 0, s, mostDeference)
 }
 
 // heading is the title and, behind it where the line holds them, number and

@@ -16,6 +16,7 @@ type writer struct {
 	out    bytes.Buffer
 	width  int
 	colour bool
+	all    bool
 }
 
 func newWriter(o Options) *writer {
@@ -23,7 +24,7 @@ func newWriter(o Options) *writer {
 	if width == 0 {
 		width = 80
 	}
-	return &writer{width: max(width, 40), colour: o.Colour}
+	return &writer{width: max(width, 40), colour: o.Colour, all: o.All}
 }
 
 // blank writes one empty line, never two.

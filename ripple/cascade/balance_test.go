@@ -12,7 +12,7 @@ import (
 
 // unit is a cascade in which one period's load moves every capacitor by one volt:
 // 1 A, 1 Hz, 1 F. climb is linear, so its range does not matter here.
-func unit(n int) Cascade { return Cascade{Peak: 1e6, Frequency: 1}.Equal(n, 1) }
+func unit(n int) Cascade { return Cascade{Peak: 1e6, Frequency: 1}.WithEqual(n, 1) }
 
 var kinds = []struct {
 	name                string

@@ -16,6 +16,9 @@ type Cascade struct {
 	Peak        quantity.Voltage // of the drive, zero to peak, unloaded; of each half
 	Frequency   quantity.Frequency
 	ForwardDrop quantity.Voltage // of each diode position
+	// Unbalance is the mismatch of the halves of a symmetrical drive: they have
+	// peak (1 ± half of it).
+	Unbalance quantity.Fraction
 
 	SourceResistance quantity.Resistance // in series with the drive
 	DiodeResistance  quantity.Resistance // of each diode position
@@ -26,8 +29,8 @@ type Cascade struct {
 	ToGround       quantity.Capacitance // stray, stage.k to ground
 }
 
-// Equal fills a cascade with n stages of one capacitance.
-func (c Cascade) Equal(n int, each quantity.Capacitance) Cascade {
+// WithEqual fills a cascade with n stages of one capacitance.
+func (c Cascade) WithEqual(n int, each quantity.Capacitance) Cascade {
 	c.Coupling, c.Smoothing = repeated(n, each), repeated(n, each)
 	return c
 }

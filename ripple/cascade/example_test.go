@@ -10,7 +10,7 @@ import (
 // M. S. Naidu and V. Kamaraju, High Voltage Engineering, example 6.1: 8 stages of
 // 50 nF on 125 kV peak at 150 Hz, 5 mA. Printed: 248 kV, 12.4 %, 14 stages.
 func ExampleCascade_TextbookDrop() {
-	c := cascade.Cascade{Peak: 125e3, Frequency: 150}.Equal(8, 50e-9)
+	c := cascade.Cascade{Peak: 125e3, Frequency: 150}.WithEqual(8, 50e-9)
 	noLoad, _ := c.NoLoad()
 	book, _ := c.TextbookDrop(5e-3)
 	stages, _ := c.StagesForMostOutput(5e-3)
@@ -35,15 +35,15 @@ func ExampleCascade_Loaded() {
 
 // A load the charge balance cannot answer for is refused.
 func ExampleCascade_Loaded_refused() {
-	c := cascade.Cascade{Peak: 1e3, Frequency: 50}.Equal(1, 10e-9)
+	c := cascade.Cascade{Peak: 1e3, Frequency: 50}.WithEqual(1, 10e-9)
 	_, err := c.Loaded(1e-3)
 	fmt.Println(err)
-	// Output: the capacitors move by 2 kV a period, more than 0.3 of the 1 kV peak of the drive: the charging pulses are too long for charge balance
+	// Output: one period's load moves capacitors by 2 kV, more than 300 V at the 1 kV peak of the drive: the charging pulses are too long for charge balance
 }
 
 // The current into a resistor follows from the line of the supply.
 func ExampleCascade_Supply() {
-	c := cascade.Cascade{Peak: 2e3, Frequency: 40e3, ForwardDrop: 10}.Equal(6, 2.2e-9)
+	c := cascade.Cascade{Peak: 2e3, Frequency: 40e3, ForwardDrop: 10}.WithEqual(6, 2.2e-9)
 	s, _ := c.Supply()
 	i := s.Into(200e6)
 	fmt.Println(quantity.Text(s.NoLoad), quantity.Text(s.OutputResistance), quantity.Text(i), quantity.Text(s.Voltage(i)))
@@ -52,7 +52,7 @@ func ExampleCascade_Supply() {
 
 // Amplitudes at the drive frequency and its harmonics, for the filter that follows.
 func ExampleWaveform_Harmonic() {
-	c := cascade.Cascade{Peak: 2e3, Frequency: 40e3}.Equal(4, 1e-9)
+	c := cascade.Cascade{Peak: 2e3, Frequency: 40e3}.WithEqual(4, 1e-9)
 	s, _ := c.Loaded(100e-6)
 	for k := 1; k <= 3; k++ {
 		fmt.Println(k, quantity.Text(s.Ripple.Amplitude(k)))
@@ -66,7 +66,7 @@ func ExampleWaveform_Harmonic() {
 // The doubler's output after whole periods: K. Zhou's handout prints 1, 1.5, 1.75,
 // 1.875 of the peak, so it passes 90 % of two peaks in the fourth.
 func ExampleCascade_RisePeriods() {
-	c := cascade.Cascade{Peak: 1e3, Frequency: 1e3}.Equal(1, 1e-6)
+	c := cascade.Cascade{Peak: 1e3, Frequency: 1e3}.WithEqual(1, 1e-6)
 	n, _ := c.RisePeriods(0.9)
 	fmt.Println(n)
 	// Output: 3.5

@@ -35,7 +35,7 @@ type Assumption struct {
 
 // Assumptions lists what [Cascade.Loaded] leaves out: source and diode resistance
 // above [StiffBelow], any leakage inductance (no closed form is known; it can raise
-// or lower the output) and any stray capacitance.
+// or lower the output), any stray capacitance and any unbalance of a symmetrical drive.
 func (c Cascade) Assumptions() []Assumption {
 	var list []Assumption
 	if r := c.Stiffness(); !quantity.AtMost(r, StiffBelow) {
@@ -50,18 +50,23 @@ func (c Cascade) Assumptions() []Assumption {
 		list = append(list, Assumption{"stray capacitance",
 			"computed without stray and junction capacitance, which lower the output of long ladders most"})
 	}
+	if c.Symmetrical && c.Unbalance != 0 {
+		list = append(list, Assumption{"unbalance",
+			"computed for balanced halves; an unbalance brings ripple at the drive frequency, of the half-wave kind"})
+	}
 	return list
 }
 
 // SourceDrop is what resistance and inductance of the source and resistance of the
-// diodes take from the mean output: zero without them and without load, else a
+// diodes take from the mean output: zero without load, and zero for a stiff source,
+// which up to [StiffBelow] means within about 1 % of the load's own drop; else a
 // lack, since no closed form exists.
 func (c Cascade) SourceDrop(load quantity.Current) (quantity.Voltage, error) {
 	if err := c.solvable(load); err != nil {
 		return 0, err
 	}
-	ideal := c.SourceResistance+c.DiodeResistance == 0 && c.Inductance == 0
-	if ideal || load == 0 && !c.strays() {
+	stiff := quantity.AtMost(c.Stiffness(), StiffBelow) && c.Inductance == 0
+	if stiff || load == 0 && !c.strays() {
 		return 0, nil
 	}
 	return 0, lack.Failed("the drop by source resistance and leakage inductance has no closed form; it needs the network in time")

@@ -8,7 +8,7 @@ import (
 )
 
 func TestAssumptions(t *testing.T) {
-	stiff := Cascade{Peak: 2000, Frequency: 1e4, SourceResistance: 60, DiodeResistance: 40}.Equal(3, 1e-9)
+	stiff := Cascade{Peak: 2000, Frequency: 1e4, SourceResistance: 60, DiodeResistance: 40}.WithEqual(3, 1e-9)
 	near(t, "R f C", stiff.Stiffness(), 1e-3, 1e-9)
 	if list := stiff.Assumptions(); len(list) != 0 {
 		t.Errorf("at the limit a source is stiff: %v", list)
@@ -24,8 +24,9 @@ func TestAssumptions(t *testing.T) {
 		{"stray capacitance", func(c *Cascade) { c.Junction = 1e-12 }},
 		{"stray capacitance", func(c *Cascade) { c.BetweenColumns = 1e-12 }},
 		{"stray capacitance", func(c *Cascade) { c.ToGround = 1e-12 }},
+		{"unbalance", func(c *Cascade) { c.Symmetrical, c.Unbalance = true, 0.02 }},
 	} {
-		c := stiff.Equal(3, 1e-9)
+		c := stiff.WithEqual(3, 1e-9)
 		r.spoil(&c)
 		if list := c.Assumptions(); len(list) != 1 || list[0].Of != r.of || list[0].Text == "" {
 			t.Errorf("%s: %v", r.of, list)
@@ -34,9 +35,11 @@ func TestAssumptions(t *testing.T) {
 }
 
 func TestPartsOfTheDrop(t *testing.T) {
-	ideal := Cascade{Peak: 2000, Frequency: 1e4}.Equal(3, 1e-9)
+	ideal := Cascade{Peak: 2000, Frequency: 1e4}.WithEqual(3, 1e-9)
 	real := ideal
 	real.SourceResistance, real.Junction = 100, 1e-12
+	soft := real
+	soft.SourceResistance = 101
 	inductive := ideal
 	inductive.Inductance = 1e-3
 	type part func(Cascade, quantity.Current) (quantity.Voltage, error)
@@ -49,9 +52,10 @@ func TestPartsOfTheDrop(t *testing.T) {
 		answer float64
 	}{
 		{"ideal source", ideal, Cascade.SourceDrop, 1e-5, false, 0},
-		{"resistance, no load", Cascade{Peak: 2000, Frequency: 1e4, SourceResistance: 100}.Equal(3, 1e-9), Cascade.SourceDrop, 0, false, 0},
-		{"resistance and strays, no load", real, Cascade.SourceDrop, 0, true, 0},
-		{"resistance", real, Cascade.SourceDrop, 1e-5, true, 0},
+		{"stiff source", real, Cascade.SourceDrop, 1e-5, false, 0},
+		{"resistance, no load", Cascade{Peak: 2000, Frequency: 1e4, SourceResistance: 900}.WithEqual(3, 1e-9), Cascade.SourceDrop, 0, false, 0},
+		{"resistance and strays, no load", soft, Cascade.SourceDrop, 0, true, 0},
+		{"resistance", soft, Cascade.SourceDrop, 1e-5, true, 0},
 		{"inductance", inductive, Cascade.SourceDrop, 1e-5, true, 0},
 		{"no strays", ideal, Cascade.StrayDrop, 1e-5, false, 0},
 		{"strays", real, Cascade.StrayDrop, 1e-5, true, 0},
@@ -65,22 +69,28 @@ func TestPartsOfTheDrop(t *testing.T) {
 	}
 }
 
-// Source resistance solved in time, one stage at q/(C peak) = 0.01 (own
-// computation): the drop, in q/C, that StiffBelow rests on.
-func TestStiffLimitCostsOnePercent(t *testing.T) {
-	at := map[float64]float64{0: 1.479, 0.001: 1.492, 0.01: 1.732}
-	if at[StiffBelow]/at[0] > 1.01 || at[10*StiffBelow]/at[0] < 1.15 {
-		t.Error("the limit does not lie where the drop begins to grow")
+// Drop in q/C at q/(C peak) = 0.01 with source resistance, solved in time (own
+// computation). Up to StiffBelow the law stands as well as without resistance; a
+// decade above it the drop of one stage is 15 % larger.
+func TestStiffLimit(t *testing.T) {
+	for _, r := range []struct {
+		stages               int
+		rfc, inTime, allowed float64
+	}{
+		{1, 0, 1.479, 0.015}, {1, StiffBelow, 1.492, 0.015}, {3, 0, 23.25, 0.011}, {3, StiffBelow, 23.30, 0.011},
+	} {
+		drop := float64(Cascade{Peak: 100, Frequency: 1}.WithEqual(r.stages, 1).climb(1).Drop())
+		near(t, "drop", drop, r.inTime, r.allowed)
 	}
-	c := Cascade{Peak: 100, Frequency: 1}.Equal(1, 1)
-	near(t, "stiff drop", float64(c.climb(1).Drop()), at[0], 0.015)
-	near(t, "three stages", float64(c.Equal(3, 1).climb(1).Drop()), 23.25, 0.011)
+	if drop := float64(Cascade{Peak: 100, Frequency: 1}.WithEqual(1, 1).climb(1).Drop()); drop > 0.87*1.732 {
+		t.Errorf("drop %g: R f C = 0.01 should show", drop)
+	}
 }
 
 // Independent solution in time, 9 stages of 220 pF with R f C = 0.023 and strays
 // (computed): the stiff figures are wrong there, and the assumptions say so.
 func TestLargeResistanceIsSaid(t *testing.T) {
-	c := Cascade{Peak: 2000, Frequency: 70e3, ForwardDrop: 5, SourceResistance: 1000, DiodeResistance: 500, Junction: 1e-12}.Equal(9, 220e-12)
+	c := Cascade{Peak: 2000, Frequency: 70e3, ForwardDrop: 5, SourceResistance: 1000, DiodeResistance: 500, Junction: 1e-12}.WithEqual(9, 220e-12)
 	s, err := c.Loaded(1e-4)
 	if err != nil {
 		t.Fatal(err)
@@ -93,18 +103,20 @@ func TestLargeResistanceIsSaid(t *testing.T) {
 	}
 }
 
-// Strays under load have no closed form; the no-load loss alone already explains
-// most of what the ladder solved in time lacks (5 stages, 5 pF junctions, light load).
+// Strays under load have no closed form. A ladder solved in time (independent
+// simulation, computed: 5 stages, 5 pF junctions, light load) lies between the
+// no-load figure and that less the load's own drop, and most of its ripple is what
+// the strays carry up without load.
 func TestStraysAtLightLoad(t *testing.T) {
-	c := Cascade{Peak: 3000, Frequency: 30e3, ForwardDrop: 6, Junction: 5e-12, BetweenColumns: 1e-12, ToGround: 1e-12}.Equal(5, 1e-9)
+	c := Cascade{Peak: 3000, Frequency: 30e3, ForwardDrop: 6, Junction: 5e-12, BetweenColumns: 1e-12, ToGround: 1e-12}.WithEqual(5, 1e-9)
 	s, err := c.NoLoadWithStrays()
 	if err != nil {
 		t.Fatal(err)
 	}
-	inTime := 24317.0200466
-	if float64(s.Mean) < inTime {
-		t.Errorf("without load %g, below %g under load", s.Mean, inTime)
+	load := float64(c.climb(0.2e-3).Drop())
+	if inTime := 24317.0200466; inTime > float64(s.Mean) || inTime < float64(s.Mean)-load {
+		t.Errorf("%g is not between %g and %g less", inTime, s.Mean, load)
 	}
-	ripple := float64(s.Maximum - s.Minimum)
-	t.Logf("no load %g, ripple %g against 722.25 in time", s.Mean, ripple)
+	near(t, "with the load's drop", float64(s.Mean)-load, 24317, 0.007)
+	near(t, "amplitude at f", float64(s.Maximum-s.Mean), 340.815607595, 0.04)
 }

@@ -26,7 +26,7 @@ func TestMeasuredLadders(t *testing.T) {
 		{"two stages, 10 uF", 2, 10e-6, 15.5248, 1e6, 62.0, 59.0, 0.02},
 	}
 	for _, r := range rows {
-		supply, err := Cascade{Peak: r.peak, Frequency: 50}.Equal(r.stages, r.each).Supply()
+		supply, err := Cascade{Peak: r.peak, Frequency: 50}.WithEqual(r.stages, r.each).Supply()
 		if err != nil {
 			t.Fatal(err)
 		}
@@ -40,7 +40,7 @@ func TestMeasuredLadders(t *testing.T) {
 // The same notebook with 10 nF: 7.4 V measured, 5.1 V by the line. The capacitors
 // empty within a period; the model must refuse rather than answer.
 func TestMeasuredLadderOutsideTheModel(t *testing.T) {
-	c := Cascade{Peak: 19.9095, Frequency: 50}.Equal(1, 10e-9)
+	c := Cascade{Peak: 19.9095, Frequency: 50}.WithEqual(1, 10e-9)
 	supply, _ := c.Supply()
 	load := supply.Into(1 / (1/quantity.Resistance(10e6) + 1/quantity.Resistance(462e3)))
 	near(t, "the line", float64(supply.Voltage(load)), 5.1, 0.01)
@@ -54,7 +54,7 @@ func TestMeasuredLadderOutsideTheModel(t *testing.T) {
 func TestMeasuredOutputResistance(t *testing.T) {
 	var at [5]float64
 	for _, n := range []int{1, 2, 4} {
-		s, err := Cascade{Peak: 20, Frequency: 50}.Equal(n, 10e-6).Supply()
+		s, err := Cascade{Peak: 20, Frequency: 50}.WithEqual(n, 10e-6).Supply()
 		if err != nil {
 			t.Fatal(err)
 		}
@@ -72,7 +72,7 @@ func TestMeasuredOutputResistance(t *testing.T) {
 // 0.31 to 0.33 V each at microamperes; a fixed 0.7 V would give 3.1 V at the top.
 func TestEachDiodeCostsItsDropOnce(t *testing.T) {
 	for _, r := range []struct{ drop, tolerance float64 }{{0.32, 0.02}, {0.7, 0.5}} {
-		c := Cascade{Peak: 1, Frequency: 1000, ForwardDrop: quantity.Voltage(r.drop)}.Equal(4, 1e-6)
+		c := Cascade{Peak: 1, Frequency: 1000, ForwardDrop: quantity.Voltage(r.drop)}.WithEqual(4, 1e-6)
 		s, err := c.Loaded(0)
 		if err != nil {
 			t.Fatal(err)
@@ -90,7 +90,7 @@ func TestEachDiodeCostsItsDropOnce(t *testing.T) {
 // Single Greinacher stage on a breadboard (public electronics notes, 2025, read):
 // 1 µF, ±5 V at 100 Hz, 1 MΩ gave 9.04 V, which implies 0.41 V a diode at 9 µA.
 func TestBreadboardDoubler(t *testing.T) {
-	c := Cascade{Peak: 5, Frequency: 100, ForwardDrop: 0.41}.Equal(1, 1e-6)
+	c := Cascade{Peak: 5, Frequency: 100, ForwardDrop: 0.41}.WithEqual(1, 1e-6)
 	supply, err := c.Supply()
 	if err != nil {
 		t.Fatal(err)
@@ -102,7 +102,7 @@ func TestBreadboardDoubler(t *testing.T) {
 // capacitor failed. The drive was not given, 4.1 kV is assumed: no check of numbers
 // against a measurement but the lesson that four fifths of the rating were used.
 func TestFailedCapacitorUtilisation(t *testing.T) {
-	s, err := Cascade{Peak: 4100, Frequency: 20e3}.Equal(5, 14.1e-9).Loaded(9.3e-3)
+	s, err := Cascade{Peak: 4100, Frequency: 20e3}.WithEqual(5, 14.1e-9).Loaded(9.3e-3)
 	if err != nil {
 		t.Fatal(err)
 	}
@@ -119,7 +119,7 @@ func TestMeterLoadsASmallLadder(t *testing.T) {
 		peak   quantity.Voltage
 		inTime float64
 	}{{68.78, 468.0}, {108.1, 735.5}, {196.5, 1337.3}} {
-		supply, err := Cascade{Peak: r.peak, Frequency: 30e3}.Equal(5, 68e-12).Supply()
+		supply, err := Cascade{Peak: r.peak, Frequency: 30e3}.WithEqual(5, 68e-12).Supply()
 		if err != nil {
 			t.Fatal(err)
 		}

@@ -45,7 +45,7 @@ func (c Cascade) meanDrop() cubic {
 // the capacitance, drive and load of the cascade, whatever its own number of
 // stages. A lack for unequal capacitors, for no load (the output then grows without
 // limit), and where one period's load moves a capacitor by more than [LargestSwing]
-// of the peak.
+// of the peak, so that not even one stage could be computed.
 func (c Cascade) StagesForMostOutput(load quantity.Current) (Optimum, error) {
 	if err := c.solvable(load); err != nil {
 		return Optimum{}, err

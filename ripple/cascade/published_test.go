@@ -9,7 +9,7 @@ import (
 // Naidu and Kamaraju, High Voltage Engineering, example 6.1 (read in a transcription
 // of the book's examples): 8 stages of 50 nF, 150 Hz, 125 kV taken as the peak,
 // 5 mA. Printed: drop 248 kV (12.4 %), 14 stages.
-func naidu() Cascade { return Cascade{Peak: 125e3, Frequency: 150}.Equal(8, 50e-9) }
+func naidu() Cascade { return Cascade{Peak: 125e3, Frequency: 150}.WithEqual(8, 50e-9) }
 
 func TestNaiduDropAndStages(t *testing.T) {
 	c := naidu()
@@ -105,7 +105,7 @@ func TestRippleConventionOfFullWaveRectifiers(t *testing.T) {
 	}
 	for _, r := range rows {
 		load := quantity.Current((r.peak - r.diodes) / r.resistance)
-		c := Cascade{Symmetrical: true, Peak: quantity.Voltage(r.peak), Frequency: quantity.Frequency(r.f)}.Equal(1, quantity.Capacitance(r.c))
+		c := Cascade{Symmetrical: true, Peak: quantity.Voltage(r.peak), Frequency: quantity.Frequency(r.f)}.WithEqual(1, quantity.Capacitance(r.c))
 		s, err := c.Loaded(load)
 		if err != nil {
 			t.Fatal(err)
@@ -124,7 +124,7 @@ func TestNoLoad(t *testing.T) {
 		stages     int
 		peak, want quantity.Voltage
 	}{{2, 10, 40}, {30, 500, 30000}, {2, 1, 4}} {
-		got, err := Cascade{Peak: r.peak, Frequency: 1000}.Equal(r.stages, 1e-6).NoLoad()
+		got, err := Cascade{Peak: r.peak, Frequency: 1000}.WithEqual(r.stages, 1e-6).NoLoad()
 		if err != nil || !quantity.Equal(got, r.want) {
 			t.Errorf("%d stages: %v, %v, want %v", r.stages, got, err, r.want)
 		}
@@ -140,7 +140,7 @@ func TestStagesAreNotCapacitors(t *testing.T) {
 		stages       int
 		noLoad, drop float64
 	}{{4, 756.8, 40.0317}, {8, 1513.6, 289.46}} {
-		s, err := c.Equal(r.stages, 1e-9).Loaded(194e-6)
+		s, err := c.WithEqual(r.stages, 1e-9).Loaded(194e-6)
 		if err != nil {
 			t.Fatal(err)
 		}
@@ -155,7 +155,7 @@ func TestStagesAreNotCapacitors(t *testing.T) {
 // 3049, smallest 3039 V, 10 V peak to peak, 618.3 V on a capacitor. 0.7 V per diode
 // is chosen here.
 func TestSimulatedThreeKilovolts(t *testing.T) {
-	c := Cascade{Peak: 311.13, Frequency: 50, ForwardDrop: 0.7}.Equal(5, 150e-6)
+	c := Cascade{Peak: 311.13, Frequency: 50, ForwardDrop: 0.7}.WithEqual(5, 150e-6)
 	supply, err := c.Supply()
 	if err != nil {
 		t.Fatal(err)

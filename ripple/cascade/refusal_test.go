@@ -17,12 +17,12 @@ func refused(t *testing.T, c Cascade, load quantity.Current) {
 }
 
 func TestRefusesWhatIsNoCascade(t *testing.T) {
-	good := Cascade{Peak: 2000, Frequency: 3e4, ForwardDrop: 5}.Equal(3, 1e-9)
+	good := Cascade{Peak: 2000, Frequency: 3e4, ForwardDrop: 5}.WithEqual(3, 1e-9)
 	if _, err := good.Loaded(1e-5); err != nil {
 		t.Fatal(err)
 	}
 	for name, spoil := range map[string]func(*Cascade){
-		"no stages":            func(c *Cascade) { *c = c.Equal(0, 1e-9) },
+		"no stages":            func(c *Cascade) { *c = c.WithEqual(0, 1e-9) },
 		"one list short":       func(c *Cascade) { c.Coupling = c.Coupling[:2] },
 		"no capacitance":       func(c *Cascade) { c.Smoothing[1] = 0 },
 		"negative capacitance": func(c *Cascade) { c.Coupling[1] = -1e-9 },
@@ -34,7 +34,7 @@ func TestRefusesWhatIsNoCascade(t *testing.T) {
 		"negative drop":        func(c *Cascade) { c.ForwardDrop = -1 },
 		"drop not a number":    func(c *Cascade) { c.ForwardDrop = quantity.Voltage(math.NaN()) },
 	} {
-		c := good.Equal(3, 1e-9)
+		c := good.WithEqual(3, 1e-9)
 		spoil(&c)
 		t.Run(name, func(t *testing.T) { refused(t, c, 1e-5) })
 	}
@@ -45,15 +45,16 @@ func TestRefusesWhatIsNoCascade(t *testing.T) {
 
 // Each limit answers just inside and refuses just outside.
 func TestLimitsOfTheLoad(t *testing.T) {
-	one := Cascade{Peak: 1000, Frequency: 1000}.Equal(1, 1e-9)  // swing 0.3 at 0.3 mA
-	many := Cascade{Peak: 1000, Frequency: 1000}.Equal(8, 1e-8) // drop 0.6 at 0.2556 mA
+	one := Cascade{Peak: 1000, Frequency: 1000}.WithEqual(1, 1e-9)                      // swing 0.3 at 0.3 mA
+	many := Cascade{Peak: 1000, Frequency: 1000}.WithEqual(8, 1e-8)                     // drop 0.6 at 0.2556 mA
+	twins := Cascade{Symmetrical: true, Peak: 1000, Frequency: 1000}.WithEqual(4, 1e-9) // swing 0.0375
 	square := many
 	square.Square = true
 	drop := func(c Cascade) quantity.Current { return quantity.Current(0.6 * 16000 / float64(c.climb(1).Drop())) }
 	for _, r := range []struct {
 		c    Cascade
 		edge quantity.Current
-	}{{one, 0.3e-3}, {many, drop(many)}, {square, drop(square)}} {
+	}{{one, 0.3e-3}, {many, drop(many)}, {twins, 0.3e-3 / 8}, {square, drop(square)}} {
 		if _, err := r.c.Loaded(r.edge * 0.999); err != nil {
 			t.Errorf("below the limit: %v", err)
 		}
@@ -64,7 +65,7 @@ func TestLimitsOfTheLoad(t *testing.T) {
 // A small capacitor at the top of a long ladder empties long before the drop of the
 // whole is large.
 func TestNoCapacitorEmpties(t *testing.T) {
-	c := Cascade{Peak: 1000, Frequency: 1000, Square: false}.Equal(6, 1e-6)
+	c := Cascade{Peak: 1000, Frequency: 1000}.WithEqual(6, 1e-6)
 	c.Smoothing[5] = 1e-9
 	for _, i := range []quantity.Current{0.2e-3, 0.5e-3, 1e-3, 3e-3} {
 		s, err := c.Loaded(i)
@@ -76,7 +77,7 @@ func TestNoCapacitorEmpties(t *testing.T) {
 }
 
 func TestSquareDriveNeedsEqualCapacitors(t *testing.T) {
-	c := Cascade{Peak: 1000, Frequency: 1e4, Square: true}.Equal(3, 1e-9)
+	c := Cascade{Peak: 1000, Frequency: 1e4, Square: true}.WithEqual(3, 1e-9)
 	c.Coupling[0] = 2e-9
 	refused(t, c, 1e-6)
 	if _, err := c.Supply(); lack.Of(err) == nil {
@@ -88,7 +89,7 @@ func TestSquareDriveNeedsEqualCapacitors(t *testing.T) {
 }
 
 func TestPeakNeeded(t *testing.T) {
-	c := Cascade{Peak: 1, Frequency: 3e4, ForwardDrop: 0.5}.Equal(4, 1e-9)
+	c := Cascade{Peak: 1, Frequency: 3e4, ForwardDrop: 0.5}.WithEqual(4, 1e-9)
 	c.Peak = 2000
 	s, err := c.Loaded(2e-4)
 	if err != nil {

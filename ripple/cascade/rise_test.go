@@ -24,7 +24,7 @@ func TestPeriodsToRise(t *testing.T) {
 		6: {28.5, 46.5, 122.5, 162.5, 256.5},
 		8: {50.5, 82.5, 217.5, 288.5, 455.5},
 	} {
-		c := Cascade{Peak: 1000, Frequency: 1e4}.Equal(n, 1e-9)
+		c := Cascade{Peak: 1000, Frequency: 1e4}.WithEqual(n, 1e-9)
 		for i, want := range row {
 			got, err := c.RisePeriods(fractions[i])
 			if err != nil || math.Abs(got-want) > 1e-9 {
@@ -42,7 +42,7 @@ func TestFirstPeriods(t *testing.T) {
 		stages int
 		want   []quantity.Voltage
 	}{{1, []quantity.Voltage{1, 1.5, 1.75, 1.875}}, {2, []quantity.Voltage{1, 1.5, 1.875, 2.1875}}} {
-		l := Cascade{Peak: 1, Frequency: 1}.Equal(r.stages, 1).discharged()
+		l := Cascade{Peak: 1, Frequency: 1}.WithEqual(r.stages, 1).discharged()
 		for k, want := range r.want {
 			l.negative()
 			l.positive()
@@ -60,10 +60,10 @@ func TestRiseAgainstLaddersSolvedInTime(t *testing.T) {
 		c    Cascade
 		want float64
 	}{
-		{Cascade{Peak: 5000, Frequency: 1000}.Equal(2, 10e-9), 0.0182075808711},
-		{Cascade{Peak: 5000, Frequency: 50, ForwardDrop: 10}.Equal(12, 50e-9), 12.9245789511},
-		{Cascade{Peak: 5000, Frequency: 50e3, ForwardDrop: 10}.Equal(12, 1e-9), 0.0128047254335},
-		{Cascade{Peak: 3000, Frequency: 60e3, ForwardDrop: 6}.Equal(8, 1e-9), 0.00468737388702},
+		{Cascade{Peak: 5000, Frequency: 1000}.WithEqual(2, 10e-9), 0.0182075808711},
+		{Cascade{Peak: 5000, Frequency: 50, ForwardDrop: 10}.WithEqual(12, 50e-9), 12.9245789511},
+		{Cascade{Peak: 5000, Frequency: 50e3, ForwardDrop: 10}.WithEqual(12, 1e-9), 0.0128047254335},
+		{Cascade{Peak: 3000, Frequency: 60e3, ForwardDrop: 6}.WithEqual(8, 1e-9), 0.00468737388702},
 	} {
 		got, err := r.c.RiseTime(0.95)
 		if err != nil {
@@ -96,13 +96,13 @@ func TestRisesToTheNoLoadVoltage(t *testing.T) {
 }
 
 func TestRiseRefuses(t *testing.T) {
-	c := Cascade{Peak: 1000, Frequency: 1e4}.Equal(3, 1e-9)
+	c := Cascade{Peak: 1000, Frequency: 1e4}.WithEqual(3, 1e-9)
 	for _, f := range []float64{0, 1, -0.5, 2, math.NaN()} {
 		if _, err := c.RisePeriods(f); lack.Of(err) == nil {
 			t.Errorf("fraction %g: an answer", f)
 		}
 	}
-	slow := c.Equal(3, 1e-9)
+	slow := c.WithEqual(3, 1e-9)
 	slow.Coupling[0] = 1e-16
 	if _, err := slow.RisePeriods(0.95); lack.Of(err) == nil || lack.Of(err).Kind != lack.NotReached {
 		t.Errorf("a cascade that hardly rises: %v", err)

@@ -23,6 +23,10 @@ type State struct {
 	DiodeReverse []quantity.Voltage
 
 	Ripple Waveform // of the output
+	// Column is what the top of the coupling column, coupling.N, moves by besides the
+	// drive: its alternating voltage is the drive plus this. The columns of a
+	// symmetrical cascade do so in opposite halves.
+	Column Waveform
 }
 
 // Drop is what the mean output lies below the no-load voltage.
@@ -35,11 +39,13 @@ func (s State) DropOfMaximum() quantity.Voltage { return s.NoLoad - s.Output.Max
 func (s State) DropOfMinimum() quantity.Voltage { return s.NoLoad - s.Output.Minimum }
 
 // Limits of the charge balance, from the comparison in time that the package
-// comment shows: at both limits it overstates the drop by at most a tenth and the
-// ripple by at most a third; beyond, the error grows steeply.
+// comment shows: within both it overstates the ripple of a sine drive by at most a
+// third and the drop by at most an eighth (a quarter, where the coupling capacitors
+// are much the larger); beyond, the error grows steeply.
 const (
-	// LargestSwing limits (I/f) (1/C coupling + 1/C smoothing)/2 of any stage,
-	// as a fraction of the peak of a sine drive.
+	// LargestSwing limits (I/f) (1/C coupling + 1/C smoothing)/2 of any stage, as a
+	// fraction of the peak of a sine drive. Of a symmetrical cascade, whose columns
+	// must cancel, it is divided by N^1.5.
 	LargestSwing = 0.3
 	// LargestDrop limits the drop of the mean as a fraction of the no-load voltage.
 	// Beyond two thirds the top stages of a long ladder would have no voltage left.
@@ -75,15 +81,22 @@ func (c Cascade) solvable(load quantity.Current) error {
 
 // within refuses a state outside the model.
 func (c Cascade) within(load quantity.Current, s State) error {
-	if !c.Square && !quantity.AtMost(c.swing(load), LargestSwing*c.Peak) {
-		return lack.Range("the capacitors move by %s a period, more than %g of the %s peak of the drive: the charging pulses are too long for charge balance",
-			quantity.Text(c.swing(load)), LargestSwing, quantity.Text(c.Peak))
+	if limit := c.largestSwing(); !c.Square && !quantity.AtMost(c.swing(load), limit) {
+		return lack.Range("one period's load moves capacitors by %s, more than %s at the %s peak of the drive: the charging pulses are too long for charge balance",
+			quantity.Text(c.swing(load)), quantity.Text(limit), quantity.Text(c.Peak))
 	}
 	if !quantity.AtMost(s.Drop(), LargestDrop*s.NoLoad) || s.lowest() <= 0 {
 		return lack.Range("the load would take %s of the %s the cascade gives without load: beyond %g of it charge balance fails",
 			quantity.Text(s.Drop()), quantity.Text(s.NoLoad), LargestDrop)
 	}
 	return nil
+}
+
+func (c Cascade) largestSwing() quantity.Voltage {
+	if c.Symmetrical {
+		return c.Peak * quantity.Voltage(LargestSwing*math.Pow(float64(c.Stages()), -1.5))
+	}
+	return LargestSwing * c.Peak
 }
 
 // swing is the largest movement of a stage's capacitors by one period's load.
@@ -117,11 +130,11 @@ func (c Cascade) perPeriod(load quantity.Current, of quantity.Capacitance) quant
 // capacitors the sums are the polynomials of the package comment.
 func (c Cascade) climb(load quantity.Current) State {
 	n := c.Stages()
-	s := State{NoLoad: quantity.Voltage(n) * c.rung(), Ripple: Waveform{Period: period(c.Frequency)}}
+	s := State{NoLoad: quantity.Voltage(n) * c.rung()}
 	filled := c.Peak - c.ForwardDrop // the coupling capacitor, after the negative peak
 	source := filled                 // what the drive adds at the positive peak, stage 1 only
-	var top Waveform                 // stage.k against its value after the positive peak
-	var high, meanP quantity.Voltage
+	var top, column Waveform         // stage.k and coupling.k against their values after the positive peak
+	var high, direct quantity.Voltage
 	for k := range n {
 		b := c.balance(float64(n - k))
 		qp, qs := c.perPeriod(load, c.Coupling[k]), c.perPeriod(load, c.Smoothing[k])
@@ -135,13 +148,14 @@ func (c Cascade) climb(load quantity.Current) State {
 		s.Smoothing = append(s.Smoothing, own.above(after))
 		s.Nodes = append(s.Nodes, top.above(high))
 		s.Coupling = append(s.Coupling, Swing{filled - (drawn+held/2)/2, filled, filled - drawn - held})
-		meanP += s.Coupling[k].Mean
-		s.CouplingDC = append(s.CouplingDC, meanP)
+		column = column.plus(Waveform{Rise: -drawn, First: held, Fall: -drawn - held})
+		direct += s.Coupling[k].Mean
+		s.CouplingDC = append(s.CouplingDC, direct)
 		s.DiodeReverse = append(s.DiodeReverse, after+c.ForwardDrop, low+c.ForwardDrop)
 		filled, source = low, 0
 	}
-	top.Period = s.Ripple.Period
-	s.Ripple, s.Output = top, s.Nodes[n-1]
+	top.Period, column.Period = period(c.Frequency), period(c.Frequency)
+	s.Ripple, s.Column, s.Output = top, column, s.Nodes[n-1]
 	return s
 }
 

@@ -35,6 +35,23 @@ func ordered(t *rapid.T, s Swing) {
 	}
 }
 
+// The column's own movement and the swings across its capacitors are one.
+func TestColumnIsTheSumOfCouplingSwings(t *testing.T) {
+	for _, kind := range kinds {
+		c := unit(4)
+		c.Symmetrical, c.Square = kind.symmetrical, kind.square
+		s := c.climb(1)
+		var high, low, mean quantity.Voltage
+		for _, swing := range s.Coupling {
+			high, low, mean = high+swing.Maximum, low+swing.Minimum, mean+swing.Mean
+		}
+		near(t, kind.name+": peak to peak", float64(s.Column.PeakToPeak()), float64(high-low), 1e-9)
+		near(t, kind.name+": before the positive pulse", float64(s.Column.At(0.75)), float64(high-mean), 1e-9)
+		near(t, kind.name+": before the negative pulse", float64(s.Column.At(0.5-1e-12)), float64(low-mean), 1e-9)
+		near(t, kind.name+": closed", float64(s.Column.Rise), float64(s.Column.First+s.Column.Fall+s.Column.Second), 1e-9)
+	}
+}
+
 // Upper capacitors of a loaded cascade carry less than lower ones, never more than
 // twice the peak; no diode is reversed by more than that either.
 func TestStressFallsUpwards(t *testing.T) {
@@ -54,7 +71,7 @@ func TestStressFallsUpwards(t *testing.T) {
 
 // Equal capacitors in one list or two, of one value or a hair apart, are one cascade.
 func TestListedCapacitorsAgainstEqual(t *testing.T) {
-	c := Cascade{Peak: 3000, Frequency: 3e4}.Equal(5, 1e-9)
+	c := Cascade{Peak: 3000, Frequency: 3e4}.WithEqual(5, 1e-9)
 	listed := c
 	listed.Smoothing = []quantity.Capacitance{1e-9, 1e-9 * (1 + 1e-12), 1e-9, 1e-9, 1e-9}
 	a, b := c.climb(1e-4), listed.climb(1e-4)
@@ -82,7 +99,7 @@ func TestSymmetricalIsNotHalfWaveAtTwiceTheFrequency(t *testing.T) {
 }
 
 func TestEnergy(t *testing.T) {
-	c := Cascade{Peak: 1000, Frequency: 1e4}.Equal(6, 1e-9)
+	c := Cascade{Peak: 1000, Frequency: 1e4}.WithEqual(6, 1e-9)
 	e, err := c.StoredEnergy()
 	if err != nil {
 		t.Fatal(err)

@@ -27,7 +27,7 @@ func TestEfficiencyForms(t *testing.T) {
 		near(t, "continuous", ContinuousEfficiency(r.stages, r.ratio), r.continuous, 1e-4)
 		near(t, "discrete", DiscreteEfficiency(r.stages, r.ratio), r.discrete, 1e-4)
 		near(t, "simulated", DiscreteEfficiency(r.stages, r.ratio), r.simulated, 1.5e-4)
-		c := Cascade{Peak: 1000, Frequency: 3e4, Junction: quantity.Capacitance(r.ratio * 1e-9)}.Equal(r.stages, 1e-9)
+		c := Cascade{Peak: 1000, Frequency: 3e4, Junction: quantity.Capacitance(r.ratio * 1e-9)}.WithEqual(r.stages, 1e-9)
 		s, err := c.NoLoadWithStrays()
 		if err != nil {
 			t.Fatal(err)
@@ -41,7 +41,7 @@ func TestNetworkOfStraysIsTheDiscreteForm(t *testing.T) {
 	rapid.Check(t, func(t *rapid.T) {
 		n := rapid.IntRange(1, 60).Draw(t, "stages")
 		ratio := math.Exp(rapid.Float64Range(-12, 1).Draw(t, "logarithm of the ratio"))
-		c := Cascade{Peak: 1000, Frequency: 3e4, Junction: quantity.Capacitance(ratio * 1e-9)}.Equal(n, 1e-9)
+		c := Cascade{Peak: 1000, Frequency: 3e4, Junction: quantity.Capacitance(ratio * 1e-9)}.WithEqual(n, 1e-9)
 		s, err := c.NoLoadWithStrays()
 		if err != nil {
 			t.Fatal(err)
@@ -107,10 +107,10 @@ func drawn(t *rapid.T, name string) quantity.Capacitance {
 	return quantity.Capacitance(rapid.Float64Range(0, 3e-11).Draw(t, name))
 }
 
-// A capacitor to ground on a long smoothing column is small against the column's
-// own at the bottom: without strays elsewhere the column carries no current.
+// Without strays between the columns nothing alternates on the smoothing column, so
+// that its capacitance to ground carries no current.
 func TestStrayToGroundAloneTakesNothing(t *testing.T) {
-	c := Cascade{Peak: 1000, Frequency: 3e4, ToGround: 1e-10}.Equal(5, 1e-9)
+	c := Cascade{Peak: 1000, Frequency: 3e4, ToGround: 1e-10}.WithEqual(5, 1e-9)
 	s, err := c.NoLoadWithStrays()
 	if err != nil {
 		t.Fatal(err)
@@ -121,7 +121,7 @@ func TestStrayToGroundAloneTakesNothing(t *testing.T) {
 // A symmetrical one-stage cascade: the coupling capacitor and both junctions divide
 // the drive, and each of the two diodes in series gives what is left.
 func TestSymmetricalStrays(t *testing.T) {
-	c := Cascade{Symmetrical: true, Peak: 1000, Frequency: 3e4, ForwardDrop: 10, Junction: 1e-11, BetweenColumns: 5e-12}.Equal(1, 1e-9)
+	c := Cascade{Symmetrical: true, Peak: 1000, Frequency: 3e4, ForwardDrop: 10, Junction: 1e-11, BetweenColumns: 5e-12}.WithEqual(1, 1e-9)
 	s, err := c.NoLoadWithStrays()
 	if err != nil {
 		t.Fatal(err)
@@ -131,7 +131,7 @@ func TestSymmetricalStrays(t *testing.T) {
 
 // Diodes that the weakened drive no longer opens give nothing.
 func TestWeakDriveLeavesUpperDiodesShut(t *testing.T) {
-	c := Cascade{Peak: 1, Frequency: 3e4, ForwardDrop: 0.5, Junction: 1e-9}.Equal(6, 1e-9)
+	c := Cascade{Peak: 1, Frequency: 3e4, ForwardDrop: 0.5, Junction: 1e-9}.WithEqual(6, 1e-9)
 	s, err := c.NoLoadWithStrays()
 	if err != nil {
 		t.Fatal(err)
@@ -142,7 +142,7 @@ func TestWeakDriveLeavesUpperDiodesShut(t *testing.T) {
 }
 
 func TestNegativeStrayIsRefused(t *testing.T) {
-	c := Cascade{Peak: 1000, Frequency: 3e4, ToGround: -1e-12}.Equal(2, 1e-9)
+	c := Cascade{Peak: 1000, Frequency: 3e4, ToGround: -1e-12}.WithEqual(2, 1e-9)
 	if _, err := c.NoLoadWithStrays(); lack.Of(err) == nil {
 		t.Error("an answer")
 	}

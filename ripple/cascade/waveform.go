@@ -10,8 +10,8 @@ import (
 // Waveform is the ripple of narrow pulses: up by Rise at the positive peak of the
 // drive (time zero), down evenly by First until the negative peak half a period
 // later, down by Fall there, down evenly by Second until the next positive peak.
-// Rise = First + Fall + Second. A symmetrical cascade has a negative Fall: the
-// wave-form repeats twice a period.
+// Rise = First + Fall + Second. A symmetrical cascade has a negative Fall: its
+// output repeats twice a period.
 type Waveform struct {
 	Period                    quantity.Time
 	Rise, First, Fall, Second quantity.Voltage

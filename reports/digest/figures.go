@@ -24,6 +24,15 @@ type Row struct {
 // whole is the subject of a figure that names none.
 const whole = "whole chain"
 
+// Part is the subject where the row belongs to a part of the chain; empty where
+// it is of the whole.
+func (r Row) Part() string {
+	if r.Subject == whole {
+		return ""
+	}
+	return r.Subject
+}
+
 // States lists the states the figures know, in the order working, cold, lost and
 // then of appearance; the empty state is not among them.
 func States(figures []figure.Figure) []string {

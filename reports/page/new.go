@@ -63,7 +63,10 @@ func summary(lines []rules.Line) Facts {
 
 func against(r *rules.Review) []Block {
 	entries := digest.Entries(digest.Against(r))
-	if len(entries) == 0 {
+	switch {
+	case len(r.Findings) == 0:
+		return nil
+	case len(entries) == 0:
 		return []Block{Paragraph{"No finding stands against switching on."}}
 	}
 	t := Table{Columns: []Column{{Title: "", Share: 0.16}, {Title: "Stands against switching on", Share: 0.34}, {Title: "Why", Share: 0.5}}}

@@ -22,6 +22,7 @@ type TitleBlock struct {
 type Section struct {
 	Title  string
 	Fresh  bool // begins a sheet
+	Whole  bool // stands on one sheet where it can
 	Blocks []Block
 }
 

@@ -22,7 +22,7 @@ func outline(d *page.Document) string {
 	var b strings.Builder
 	fmt.Fprintf(&b, "title block %+v\n", d.Block)
 	for _, s := range d.Sections {
-		fmt.Fprintf(&b, "\nsection %q fresh %t\n", s.Title, s.Fresh)
+		fmt.Fprintf(&b, "\nsection %q fresh %t whole %t\n", s.Title, s.Fresh, s.Whole)
 		for _, block := range s.Blocks {
 			piece(&b, block)
 		}
@@ -72,6 +72,16 @@ func TestFrontSheetAnswers(t *testing.T) {
 		if !strings.Contains(front, want) {
 			t.Errorf("%q is not on the front sheet", want)
 		}
+	}
+}
+
+func TestNothingJudgedIsNotCalledClear(t *testing.T) {
+	text := outline(page.New(sample.Empty()))
+	if strings.Contains(text, "No finding stands against") || !strings.Contains(text, "Nothing was judged") {
+		t.Error(text)
+	}
+	if text := outline(page.New(sample.Sound())); !strings.Contains(text, "No finding stands against") {
+		t.Error(text)
 	}
 }
 

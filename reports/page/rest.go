@@ -28,7 +28,7 @@ func figureTable(groups []digest.Group, columns []string) Table {
 	}
 	for _, g := range groups {
 		if len(g.Rows) == 1 {
-			t.Rows = append(t.Rows, valueRow(g.Rows[0], strong(g.ID), plain(g.What), plain(g.Rows[0].Subject), labelledSmall("basis:", g.Basis)))
+			t.Rows = append(t.Rows, valueRow(g.Rows[0], strong(g.ID), plain(g.What), plain(g.Rows[0].Part()), labelledSmall("basis:", g.Basis)))
 			continue
 		}
 		t.Rows = append(t.Rows, Row{Group: true, Cells: []Cell{lines(strong(g.ID), plain(g.What), labelledSmall("basis:", g.Basis))}})
@@ -87,7 +87,7 @@ func signing(r *rules.Review) Section {
 	for _, in := range r.Inputs {
 		t.Rows = append(t.Rows, Row{Cells: []Cell{lines(plain(in.Role)), lines(plain(in.Name)), lines(small(in.SHA256))}})
 	}
-	return Section{Title: "Sign-off", Blocks: []Block{
+	return Section{Title: "Sign-off", Whole: true, Blocks: []Block{
 		Paragraph{"The signatures below are for the files named here by their SHA-256, as reviewed by " + r.Program.Name + " " + r.Program.Version + ". A file changed afterwards needs a new review."},
 		t,
 		Notice{r.Deference},

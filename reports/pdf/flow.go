@@ -66,7 +66,7 @@ func (w *flow) gap(height float64) {
 const keep = 24.0
 
 func (w *flow) section(s page.Section) {
-	if s.Fresh && !w.fresh() {
+	if s.Fresh && !w.fresh() || s.Whole && !w.holds(s) {
 		w.turn()
 	}
 	w.gap(7)
@@ -77,6 +77,14 @@ func (w *flow) section(s page.Section) {
 	for _, b := range s.Blocks {
 		w.block(b)
 	}
+}
+
+// holds reports whether what is left of the sheet takes the section whole.
+func (w *flow) holds(s page.Section) bool {
+	trial := &flow{fonts: w.fonts, sheets: []*sheet{{}}, y: w.y}
+	s.Whole = false
+	trial.section(s)
+	return w.fresh() || len(trial.sheets) == 1
 }
 
 func (w *flow) block(b page.Block) {

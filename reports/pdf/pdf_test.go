@@ -118,6 +118,24 @@ func TestEverySheetBearsItsNumberAndTheTitleBlock(t *testing.T) {
 	}
 }
 
+func TestSignaturesStandWithWhatTheySign(t *testing.T) {
+	f := testFonts(t)
+	for name, r := range samples {
+		sheets := layout(f, page.New(r))
+		last := strings.Join(words(sheets[len(sheets)-1]), " ")
+		for _, want := range []string{"Sign-off", "Prepared", "Checked", "Approved"} {
+			if !strings.Contains(last, want) {
+				t.Errorf("%s: %q is not on the last sheet", name, want)
+			}
+		}
+		for _, in := range r.Inputs {
+			if !strings.Contains(last, in.SHA256) {
+				t.Errorf("%s: the digest of %s is not on the last sheet", name, in.Name)
+			}
+		}
+	}
+}
+
 func words(s *sheet) []string {
 	var all []string
 	for _, i := range s.items {

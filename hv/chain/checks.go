@@ -2,14 +2,14 @@ package chain
 
 import (
 	"fmt"
-	"slices"
+	"strings"
 
 	"kilovet/hv/document"
 	"kilovet/hv/quantity"
 )
 
 // checks are all checks across keys. Each finds nothing in a sound description.
-var checks = []check{
+var checks = []Check{
 	{"purpose", "there is something to review: a multiplier, a spacing or a field", checkPurpose},
 	{"multiplier", "what hangs on the multiplier has one, and the multiplier has a drive", checkMultiplier},
 	{"stages", "a list of capacitances has one value, or one a stage", checkStages},
@@ -29,22 +29,20 @@ var checks = []check{
 }
 
 func checkPurpose(s *survey) {
-	given := s.Multiplier != nil || s.Drive != nil || len(s.Spacings) > 0 || len(s.Fields) > 0
-	if given || !s.legible || s.refused.Meant("multiplier") || s.refused.Meant("spacing") || s.refused.Meant("field") || s.refused.Meant("drive") {
-		return
+	if s.without(s.Multiplier != nil) && s.without(len(s.Spacings) > 0) && s.without(len(s.Fields) > 0) {
+		s.fault(s.Here(), "there is nothing to review", "describe [drive] and [multiplier], a [[spacing]] or a [[field]]")
 	}
-	s.fault(s.Here(), "there is nothing to review", "describe [drive] and [multiplier], a [[spacing]] or a [[field]]")
 }
 
 // checkMultiplier asks for a drive to a multiplier, and for a multiplier to all that hangs on one.
 func checkMultiplier(s *survey) {
 	if s.Multiplier != nil {
-		if s.without(s.Drive != nil, "drive") {
+		if s.without(s.Drive != nil) {
 			s.fault(s.Multiplier.Here(), "a multiplier without a drive", "describe [drive]: frequency and peak at least")
 		}
 		return
 	}
-	if !s.without(false, "multiplier") {
+	if !s.without(false) {
 		return
 	}
 	for _, place := range s.hangingOn() {
@@ -121,13 +119,13 @@ func checkDrive(s *survey) {
 		s.fault(d.PeakLimit.Place, "the limit is below the peak of "+quantity.Text(d.Peak.V), "give the most that the peak can reach if regulation is lost")
 	}
 	m := s.Multiplier
-	if d.Unbalance.Set() && m != nil && !m.Symmetrical() && !s.refused.At(m.Topology.Place) {
+	if d.Unbalance.Set() && m != nil && !m.Symmetrical() && (!m.Topology.Set() || s.sound(m.Topology.Place)) {
 		s.fault(d.Unbalance.Place, "a half-wave multiplier has one drive, not two halves", `leave it out, or write topology = "symmetrical"`)
 	}
 }
 
 func checkRegulation(s *survey) {
-	if s.Regulation != nil && s.without(s.Divider != nil, "divider") {
+	if s.Regulation != nil && s.without(s.Divider != nil) {
 		s.fault(s.Regulation.Here(), "regulation without a divider that senses the output", "describe [divider]")
 	}
 }
@@ -159,10 +157,10 @@ func checkBias(s *survey) {
 // selfBias is made by the emission in a resistor, so it needs both, and the output
 // must feed the control electrode.
 func (s *survey) selfBias(b *Bias) {
-	if s.without(s.Gun != nil, "gun") {
+	if s.without(s.Gun != nil) {
 		s.fault(b.Kind.Place, "self-bias without a gun whose emission makes it", `describe [gun], or write kind = "fixed" with a voltage`)
 	}
-	if s.without(b.Resistor != nil, b.Key+".resistor") {
+	if s.without(b.Resistor != nil) {
 		s.fault(b.Here(), "self-bias without a resistor", `give resistor, as in resistor = { value = "4.7 Mohm" }`)
 	}
 	if b.Fed.V == "cathode" {
@@ -178,19 +176,21 @@ func checkHeater(s *survey) {
 	if h == nil || h.Supply.V != "ac" || !s.lacks(h.Frequency.Place) {
 		return
 	}
-	if s.Site == nil && s.without(false, "site") || s.Site != nil && s.lacks(s.Site.MainsFrequency.Place) {
+	if s.Site == nil && s.without(false) || s.Site != nil && s.lacks(s.Site.MainsFrequency.Place) {
 		s.fault(h.Supply.Place, "an AC heater of unknown frequency", "give frequency here or mains_frequency in [site]")
 	}
 }
 
 func checkTargets(s *survey) {
 	var names []string
+	known := map[string]bool{}
 	for i := range s.Targets {
 		names = append(names, s.Targets[i].Name.V)
+		known[s.Targets[i].Name.V] = true
 	}
 	for i := range s.Shields {
 		t := s.Shields[i].Target
-		if s.sound(t.Place) && s.legible && !s.refused.Meant("target") && !slices.Contains(names, t.V) {
+		if s.sound(t.Place) && s.without(known[t.V]) {
 			s.fault(t.Place, quoted(t.V)+" is no described target", oneOf("target", "describe it as a [[target]]", t.V, names))
 		}
 	}
@@ -210,19 +210,9 @@ func oneOf(what, otherwise, name string, known []string) string {
 
 // list writes names one after the other, the middle of a long list left out.
 func list(names []string) string {
-	const most = 40
-	text := ""
-	for i, n := range names {
-		if len(names) > most && i == most-4 {
-			text += ", …"
-		}
-		if len(names) > most && i >= most-4 && i < len(names)-4 {
-			continue
-		}
-		if text != "" {
-			text += ", "
-		}
-		text += n
+	const most, last = 40, 4
+	if n := len(names); n > most {
+		return strings.Join(names[:most-last], ", ") + ", … " + strings.Join(names[n-last:], ", ")
 	}
-	return text
+	return strings.Join(names, ", ")
 }

@@ -30,7 +30,7 @@ func (s *survey) electrodePotential(e *Electrode) {
 		s.fault(e.Voltage.Place, "both a node and a voltage", "keep one of the two")
 	case s.lacks(e.Node.Place) && s.lacks(e.Voltage.Place):
 		s.fault(e.Here(), "neither a node nor a voltage", `give one, as in voltage = "0 V"`)
-	case e.Node.Set() && s.without(s.Multiplier != nil, "multiplier") && e.Node.V != "ground":
+	case e.Node.Set() && s.without(s.Multiplier != nil) && e.Node.V != "ground":
 		s.fault(e.Node.Place, "without a multiplier nothing tells the voltage of a node", `give voltage in place of node, as in voltage = "20 kV"`)
 	}
 }
@@ -131,7 +131,8 @@ func (s *survey) point(p document.Given[[]quantity.Length]) bool {
 	return s.sound(p.Place) && len(p.V) == 2
 }
 
-// radius refuses points on the wrong side of the axis; it reports whether there is a point.
+// radius refuses points on the wrong side of the axis; it reports whether there is a
+// point to go on from.
 func (s *survey) radius(p document.Given[[]quantity.Length]) bool {
 	if !s.point(p) {
 		return false
@@ -139,7 +140,7 @@ func (s *survey) radius(p document.Given[[]quantity.Length]) bool {
 	if p.V[0] < 0 {
 		s.fault(p.Place, "r is negative", "give the distance from the axis first, then z along it")
 	}
-	return true
+	return p.V[0] >= 0
 }
 
 func distance(a, b []quantity.Length) quantity.Length {

@@ -12,7 +12,6 @@ func checkNodes(s *survey) {
 	if !s.legible {
 		return
 	}
-	s.nodes = s.Nodes()
 	for i := range s.Loads {
 		s.node(s.Loads[i].At)
 	}
@@ -51,13 +50,9 @@ func (s *survey) eachNode(list document.Given[[]string]) {
 // node reports a name that is no node. Without a multiplier there are hardly any,
 // and what needs them is reported apart.
 func (s *survey) node(name document.Given[string]) {
-	if !s.sound(name.Place) || slices.Contains(s.nodes, name.V) {
-		return
+	if s.sound(name.Place) && !s.nodes[name.V] && s.Multiplier != nil {
+		s.fault(name.Place, quoted(name.V)+" is no node of this chain", oneOf("node", "", name.V, s.listed))
 	}
-	if s.Multiplier == nil {
-		return
-	}
-	s.fault(name.Place, quoted(name.V)+" is no node of this chain", oneOf("node", "", name.V, s.nodes))
 }
 
 // newNodes judges the names that loose parts give to new nodes: none may pass for
@@ -107,9 +102,8 @@ func checkNames(s *survey) {
 		s.distinct("probe", names(s.Fields[i].Probes, func(p *Probe) document.Given[string] { return p.Name }))
 		s.distinct("dielectric", names(s.Fields[i].Dielectrics, func(d *Dielectric) document.Given[string] { return d.Name }))
 	}
-	nodes := s.Nodes()
 	for _, p := range parts {
-		if s.sound(p.Place) && slices.Contains(nodes, p.V) {
+		if s.sound(p.Place) && s.nodes[p.V] {
 			s.fault(p.Place, "a part with the name of a node", "give it a name of its own")
 		}
 	}

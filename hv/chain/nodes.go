@@ -1,18 +1,20 @@
 package chain
 
-import (
-	"fmt"
-	"slices"
-)
+import "fmt"
 
 // Nodes lists every node of the chain by all its names, from ground upwards, those
 // that parts make last.
 func (c *Chain) Nodes() []string {
 	nodes := c.fixedNodes()
+	seen := map[string]bool{"": true}
+	for _, name := range nodes {
+		seen[name] = true
+	}
 	for i := range c.Parts {
 		for _, end := range []string{c.Parts[i].From.V, c.Parts[i].To.V} {
-			if end != "" && !slices.Contains(nodes, end) {
+			if !seen[end] {
 				nodes = append(nodes, end)
+				seen[end] = true
 			}
 		}
 	}
@@ -68,3 +70,6 @@ func (c *Chain) columnNodes() []string {
 
 // mostStages bounds what an absurd number of stages, refused in reading, can cost.
 const mostStages = 1000
+
+// HasCathode reports whether the chain ends at a cathode.
+func (c *Chain) HasCathode() bool { return c.Bias != nil || c.Gun != nil || c.Heater != nil }

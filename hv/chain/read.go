@@ -2,6 +2,8 @@ package chain
 
 import (
 	"fmt"
+	"slices"
+	"strings"
 
 	"kilovet/hv/document"
 )
@@ -11,29 +13,44 @@ import (
 func Read(data []byte) (*Chain, document.Faults) {
 	c := &Chain{}
 	faults := document.Read(data, c)
-	s := &survey{Chain: c, refused: faults, legible: !faults.Unread(), faults: faults}
+	s := newSurvey(c, faults)
 	for _, check := range checks {
-		s.code = check.code
+		s.code = check.Code
 		check.run(s)
 	}
-	return c, s.faults.Sorted()
+	return c, append(faults, s.faults...).Sorted()
 }
 
-// check is one check across keys.
-type check struct {
-	code document.Code
-	says string // what holds in a sound description
+// Check is one check across keys.
+type Check struct {
+	Code document.Code
+	Says string // what holds in a sound description
 	run  func(*survey)
 }
+
+// Checks lists all checks across keys.
+func Checks() []Check { return slices.Clone(checks) }
 
 // survey is a description under the checks across its keys.
 type survey struct {
 	*Chain
-	refused document.Faults // what reading single keys found
+	refused map[[2]int]bool // by line and column: given, but not accepted
 	legible bool            // nothing was left unread: what is not there is absent
+	nodes   map[string]bool
+	listed  []string // the nodes in order
 	faults  document.Faults
 	code    document.Code // of the check that runs
-	nodes   []string      // once asked for
+}
+
+func newSurvey(c *Chain, found document.Faults) *survey {
+	s := &survey{Chain: c, refused: map[[2]int]bool{}, legible: !found.Unread(), nodes: map[string]bool{}, listed: c.Nodes()}
+	for _, f := range found {
+		s.refused[[2]int{f.Line, f.Column}] = true
+	}
+	for _, name := range s.listed {
+		s.nodes[name] = true
+	}
+	return s
 }
 
 // fault reports a fault at a place of the description.
@@ -43,15 +60,23 @@ func (s *survey) fault(at document.Place, what, remedy string) {
 
 // sound reports whether a value was given and accepted, so that it can be judged
 // against others.
-func (s *survey) sound(at document.Place) bool { return at.Line > 0 && !s.refused.At(at) }
-
-// without reports whether a key is truly absent: not given, and neither misspelt
-// nor hidden in something illegible.
-func (s *survey) without(given bool, key string) bool {
-	return !given && s.legible && !s.refused.Meant(key)
+func (s *survey) sound(at document.Place) bool {
+	return at.Line > 0 && !s.refused[[2]int{at.Line, at.Column}]
 }
 
+// without reports whether something is truly absent: neither given nor perhaps
+// hidden in something illegible.
+func (s *survey) without(given bool) bool { return !given && s.legible }
+
 // lacks is without for a leaf.
-func (s *survey) lacks(at document.Place) bool { return s.without(at.Line > 0, at.Key) }
+func (s *survey) lacks(at document.Place) bool { return s.without(at.Line > 0) }
+
+// a puts the article before a word.
+func a(word string) string {
+	if strings.ContainsAny(word[:1], "aeio") {
+		return "an " + word
+	}
+	return "a " + word
+}
 
 func quoted(name string) string { return fmt.Sprintf("%q", name) }

@@ -31,20 +31,28 @@ func (b *binder) table(n *node, into reflect.Value, path string) {
 	if f := into.FieldByName("Table"); f.IsValid() && f.Type() == reflect.TypeFor[Table]() {
 		f.Set(reflect.ValueOf(Table{Place{Key: path, Line: n.place.Line, Column: n.place.Column}}))
 	}
-	before, declared := len(b.faults), b.declared(into.Type())
-	for _, name := range n.names {
-		if !slices.ContainsFunc(declared, func(d Declared) bool { return d.Key == name }) {
-			b.unknown(n, name, path, declared)
-		}
-	}
+	declared := b.declared(into.Type())
+	misspelt := b.unknowns(n, path, declared)
 	for _, d := range declared {
 		d.Path = join(path, d.Key)
 		child := n.children[d.Key]
-		if child == nil && d.Needed && !n.partial && !b.faults[before:].Meant(d.Path) {
+		if child == nil {
+			child = d.presumed(misspelt[d.Key])
+		}
+		if child == nil && d.Needed && !n.partial {
 			b.missing(n, d)
 		}
 		b.field(child, d, into.Field(d.index))
 	}
+}
+
+// presumed is what stands at a misspelt key that was probably meant to be this one:
+// a table is read as if it were, a value only counts as given.
+func (d Declared) presumed(n *node) *node {
+	if n == nil || d.kind != nil && (n.kind == table || n.kind == tables) {
+		return n
+	}
+	return &node{kind: illegible, place: n.place}
 }
 
 // field fills one field; without a node it notes the keys of leaves only.
@@ -52,6 +60,8 @@ func (b *binder) field(n *node, d Declared, into reflect.Value) {
 	switch {
 	case d.kind == nil:
 		b.leaf(n, d, into)
+	case n == nil && into.Kind() == reflect.Struct:
+		b.table(&node{kind: table, partial: true}, into, d.Path) // for the keys of its leaves
 	case n == nil:
 	case d.Holds == OneTable:
 		b.oneTable(n, d, into)
@@ -130,29 +140,47 @@ func within(n *node) string {
 	return "the description"
 }
 
-// unknown reports a key that is not declared, with what was probably meant.
-func (b *binder) unknown(n *node, name, path string, declared []Declared) {
+// unknowns reports the keys of a table that are not declared, and lists what stands
+// there by the keys that were probably meant.
+func (b *binder) unknowns(n *node, path string, declared []Declared) map[string]*node {
+	var misspelt map[string]*node
+	for _, name := range n.names {
+		if slices.ContainsFunc(declared, func(d Declared) bool { return d.Key == name }) {
+			continue
+		}
+		if near := b.unknown(n, name, path, declared); near != "" && misspelt[near] == nil {
+			if misspelt == nil {
+				misspelt = map[string]*node{}
+			}
+			misspelt[near] = n.children[name]
+		}
+	}
+	return misspelt
+}
+
+// unknown reports a key that is not declared and returns the one that was probably meant.
+func (b *binder) unknown(n *node, name, path string, declared []Declared) string {
 	accepted := make([]string, len(declared))
 	for i, d := range declared {
 		accepted[i] = d.Key
 	}
-	fault := Fault{Code: Unknown, Key: join(path, brief(name)), Line: n.keys[name].Line, Column: n.keys[name].Column, What: "there is no such key"}
+	what := "there is no such key"
 	if kind := n.children[name].kind; kind == table || kind == tables {
-		fault.What = "there is no such table"
+		what = "there is no such table"
 	}
 	near, ok := Nearest(name, accepted)
-	if ok {
-		fault.Meant = join(path, near)
+	if !ok {
+		near = ""
 	}
-	fault.Remedy = b.suggestion(name, near, ok) + "accepted here: " + strings.Join(accepted, ", ")
-	b.faults = append(b.faults, fault)
+	b.fault(Unknown, n.keys[name], join(path, brief(name)), what, b.suggestion(name, near)+"accepted here: "+strings.Join(accepted, ", "))
+	return near
 }
 
-func (b *binder) suggestion(name, near string, ok bool) string {
+func (b *binder) suggestion(name, near string) string {
 	switch {
-	case ok && strings.EqualFold(near, name):
+	case strings.EqualFold(near, name):
 		return fmt.Sprintf("upper and lower case matter: write %q; ", near)
-	case ok:
+	case near != "":
 		return fmt.Sprintf("was %q meant? ", near)
 	}
 	if b.all == nil {

@@ -35,10 +35,12 @@ type Declared struct {
 	Example   string // as it would stand in a file, without quotes
 	Needed    bool
 
-	index  int // of the field
+	index  int          // of the field
+	field  reflect.Type // of the field
+	kind   reflect.Type // of the struct that a table fills; nil for leaves
+	value  reflect.Type // of what a leaf holds; nil for tables
 	bounds bounds
-	flaw   error        // of the range tag
-	kind   reflect.Type // of the struct that a table fills
+	flaw   error // of the range tag
 }
 
 var (
@@ -63,7 +65,7 @@ func declare(t reflect.Type, path string) []Declared {
 func declareField(f reflect.StructField, index int, path string) Declared {
 	d := Declared{
 		Key: f.Tag.Get("key"), Range: f.Tag.Get("range"), List: f.Tag.Get("list"), Means: f.Tag.Get("means"),
-		Example: f.Tag.Get("example"), Needed: f.Tag.Get("needed") == "yes", index: index,
+		Example: f.Tag.Get("example"), Needed: f.Tag.Get("needed") == "yes", index: index, field: f.Type,
 	}
 	d.Path = join(path, d.Key)
 	if words := f.Tag.Get("words"); words != "" {
@@ -73,7 +75,8 @@ func declareField(f reflect.StructField, index int, path string) Declared {
 		d.Holds, d.kind = holdsTable(f.Type)
 		return d
 	}
-	d.Holds, d.Dimension = holdsValue(f.Type.Field(0).Type)
+	d.value = f.Type.Field(0).Type
+	d.Holds, d.Dimension = holdsValue(d.value)
 	d.bounds, d.flaw = parseBounds(d.Range, d.Dimension)
 	return d
 }

@@ -42,7 +42,6 @@ type Fault struct {
 	Line, Column int
 	What         string
 	Remedy       string
-	Meant        string // the known key that was probably meant by an unknown one
 }
 
 // Error writes the fault on one line.
@@ -84,16 +83,6 @@ func (fs Faults) Sorted() Faults {
 		return cmp.Or(cmp.Compare(a.Line, b.Line), cmp.Compare(a.Column, b.Column))
 	})
 	return fs
-}
-
-// At reports whether a fault stands at the place.
-func (fs Faults) At(p Place) bool {
-	return slices.ContainsFunc(fs, func(f Fault) bool { return f.Line == p.Line && f.Column == p.Column })
-}
-
-// Meant reports whether an unknown key was probably meant to be this one.
-func (fs Faults) Meant(key string) bool {
-	return slices.ContainsFunc(fs, func(f Fault) bool { return key != "" && f.Meant == key })
 }
 
 // Unread reports whether some part of the description could not be read at all,

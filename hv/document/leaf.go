@@ -40,7 +40,7 @@ func (b *binder) leaf(n *node, d Declared, into reflect.Value) {
 
 // list fills a slice; "one or many" takes a single value as a list of one.
 func (b *binder) list(n *node, d Declared, value reflect.Value) {
-	items := n.items
+	items, before := n.items, len(b.faults)
 	if n.kind != list {
 		if d.List != "one or many" {
 			b.fault(Length, n.place, d.Path, "one value where a list is wanted", "write a list, as in "+d.inList())
@@ -54,7 +54,7 @@ func (b *binder) list(n *node, d Declared, value reflect.Value) {
 	if d.List == "one or many" && len(items) == 0 {
 		b.fault(Length, n.place, d.Path, "an empty list", "give at least one value, as in "+d.Sample())
 	}
-	before, values := len(b.faults), reflect.MakeSlice(value.Type(), len(items), len(items))
+	values := reflect.MakeSlice(value.Type(), len(items), len(items))
 	for i, item := range items {
 		b.single(item, d, values.Index(i))
 	}

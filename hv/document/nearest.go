@@ -6,10 +6,11 @@ import (
 )
 
 // Nearest finds the word that was most likely meant: the same letters in another
-// case, a beginning of at least three letters, or a few slips of the pen.
+// case, a beginning of at least three letters, or a few slips of the pen. It looks
+// at the first 500 words.
 func Nearest(word string, among []string) (string, bool) {
 	best, least := "", 1e9
-	for _, candidate := range among {
+	for _, candidate := range among[:min(len(among), 500)] {
 		if d := distance(word, candidate); d < least {
 			best, least = candidate, d
 		}

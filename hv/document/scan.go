@@ -1,9 +1,6 @@
 package document
 
-import (
-	"strings"
-	"unicode/utf8"
-)
+import "strings"
 
 // The scanner finds where everything stands. It takes the text apart into
 // statements (a header or a key with its value) and their values into elements, by
@@ -18,7 +15,7 @@ type statement struct {
 	kind       statementKind
 	start, end int   // of the text handed to the TOML library
 	entry      entry // headers have a key only
-	broken     bool  // the scanner found no end
+	broken     bool  // the scanner found no end: no TOML, whatever follows
 	deep       bool  // too deeply nested to hand on
 }
 
@@ -76,10 +73,6 @@ func (s *scanner) statement() statement {
 	return st
 }
 
-// tail is how much of an unreadable line is handed on: enough for a message, too
-// little to nest deeply.
-const tail = 40
-
 // finish moves past the statement and tells where its text ends: at the end of the
 // line, or before a line on which the scanner saw a new statement begin.
 func (s *scanner) finish(start int, ok bool) int {
@@ -88,15 +81,11 @@ func (s *scanner) finish(start int, ok bool) int {
 		s.at = lineStart
 		return lineStart - 1
 	}
-	seen := s.at
 	s.at = s.lineEnd()
-	end := len(strings.TrimSuffix(s.text[:s.at], "\r"))
-	if ok || end <= seen+tail {
-		return max(end, seen)
+	if s.at < len(s.text) && s.text[s.at-1] == '\r' {
+		return s.at - 1 // a line that ends in CR LF
 	}
-	for end = seen + tail; !utf8.RuneStart(s.text[end]); end++ { // whole characters only
-	}
-	return end
+	return s.at
 }
 
 func (s *scanner) header() (statementKind, entry) {
@@ -281,7 +270,7 @@ func (s *scanner) blank(lines bool) (newLine bool) {
 	for ; s.at < len(s.text); s.at++ {
 		switch c := s.text[s.at]; {
 		case c == ' ' || c == '\t':
-		case lines && (c == '\r' || c == '\n'):
+		case lines && (c == '\n' || strings.HasPrefix(s.text[s.at:], "\r\n")):
 			newLine = true
 		case lines && c == '#':
 			s.at = s.lineEnd() - 1

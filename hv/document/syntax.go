@@ -44,12 +44,19 @@ func (u *unreadable) repeated() ([]string, bool) {
 
 // decode hands one statement to the TOML library. Its panics, which some garbled
 // texts provoke, are errors like any other.
-func decode(text string) (d *decoded, bad *unreadable) {
+func (st statement) decode(whole string) (d *decoded, bad *unreadable) {
 	defer func() {
 		if p := recover(); p != nil {
 			d, bad = nil, &unreadable{message: "not TOML"}
 		}
 	}()
+	text := whole[st.start:st.end]
+	if st.broken {
+		return nil, &unreadable{message: "not closed"}
+	}
+	if strings.HasPrefix(text, byteOrderMark) { // the library would pass over it
+		return nil, &unreadable{message: "a byte order mark"}
+	}
 	d = &decoded{}
 	meta, err := toml.Decode(text, &d.values)
 	if parse, ok := err.(toml.ParseError); ok {
@@ -79,62 +86,66 @@ func plainPath(key string) []string {
 	return parts
 }
 
-// diagnosis says what is wrong with a statement that the TOML library refused, in
-// plain words where the usual slips are recognised.
-func (st statement) diagnosis(text, message string) (what, remedy string) {
+// diagnosis is what is wrong with a statement that the TOML library refused, in
+// plain words where one of the usual slips is recognised.
+type diagnosis struct {
+	offset       int
+	what, remedy string
+}
+
+func (st statement) diagnose(text string, bad *unreadable) diagnosis {
 	value := st.entry.value
-	switch first := strings.TrimSpace(text[st.start:st.end]); {
+	switch {
 	case st.kind != pair:
-		return "this header cannot be read", "write [table] or [[table]]"
-	case !strings.Contains(first, "="):
-		return "neither a key with its value, a [table] nor a comment", `write key = value; begin a comment with "#"`
-	case strings.HasPrefix(first, "="):
-		return "a value without a key", "write key = value"
+		return diagnosis{st.start, "this header cannot be read", "write [table] or [[table]]"}
+	case value.start == 0: // the scanner came to no "="
+		return diagnosis{st.start, "neither a key with its value, a [table] nor a comment", `write key = value; begin a comment with "#"`}
+	case st.entry.start == st.entry.end:
+		return diagnosis{st.start, "a value without a key", "write key = value"}
 	case value.end == value.start:
-		return "a key without a value", `write its value after "="`
+		return diagnosis{st.start, "a key without a value", `write its value after "="`}
 	case st.broken && value.opener != 0:
-		return fmt.Sprintf("the bracket %q is not closed or something between is not separated by a comma", string(value.opener)),
-			fmt.Sprintf("close it with %q and separate with commas", closing(value.opener))
+		return diagnosis{value.start, fmt.Sprintf("the bracket %q is not closed or something between is not separated by a comma", string(value.opener)),
+			fmt.Sprintf("close it with %q and separate with commas", closing(value.opener))}
 	case st.broken && isQuote(text[value.start]):
-		return "the quotes are not closed", "close them on the same line"
+		return diagnosis{value.start, "the quotes are not closed", "close them on the same line"}
 	}
-	if bare := st.unquoted(text); bare != "" {
-		return fmt.Sprintf("%s stands without quotes", bare), fmt.Sprintf("write %q: texts and quantities stand in quotes", bare)
+	if bare, offset := st.unquoted(text); bare != "" {
+		return diagnosis{offset, bare + " stands without quotes", fmt.Sprintf("write %q: texts and quantities stand in quotes", bare)}
 	}
-	return "cannot be read (" + message + ")", "texts and quantities stand in quotes, several values in [ ] with commas between"
+	return diagnosis{min(st.start+bad.offset, st.end), "cannot be read (" + bad.message + ")",
+		"texts and quantities stand in quotes, several values in [ ] with commas between"}
 }
 
 // unquoted finds the first value that only quotes would make readable.
-func (st statement) unquoted(text string) string {
+func (st statement) unquoted(text string) (bare string, offset int) {
 	value := st.entry.value
-	if value.opener == 0 && !isQuote(text[value.start]) {
-		line, _, _ := strings.Cut(text[value.start:st.end], "#")
-		if line = strings.TrimSpace(line); !bareValue.MatchString(line) {
-			return brief(line)
-		}
-		return ""
+	if value.opener != 0 || isQuote(text[value.start]) {
+		return value.unquoted(text)
 	}
-	return value.unquoted(text)
+	line, _, _ := strings.Cut(text[value.start:st.end], "#")
+	if line = strings.TrimSpace(line); !bareValue.MatchString(line) {
+		return brief(line), value.start
+	}
+	return "", 0
 }
 
-func (e element) unquoted(text string) string {
+func (e element) unquoted(text string) (bare string, offset int) {
 	if e.opener == 0 {
 		if bare := text[e.start:e.end]; bare != "" && !isQuote(bare[0]) && !bareValue.MatchString(bare) {
-			return brief(bare)
+			return brief(bare), e.start
 		}
-		return ""
-	}
-	for _, item := range e.items {
-		if bare := item.unquoted(text); bare != "" {
-			return bare
-		}
+		return "", 0
 	}
 	for _, inner := range e.entries {
-		if bare := inner.value.unquoted(text); bare != "" {
-			return bare
+		e.items = append(e.items, inner.value)
+	}
+	for _, item := range e.items {
+		if bare, offset := item.unquoted(text); bare != "" {
+			return bare, offset
 		}
 	}
-	return ""
+	return "", 0
 }
 
 func isQuote(c byte) bool { return c == '"' || c == '\'' }

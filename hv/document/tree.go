@@ -27,7 +27,7 @@ type node struct {
 	children map[string]*node
 	keys     map[string]Place // of the children's keys
 
-	headed  bool // a table under a header of its own
+	headed  bool // a table with a header of its own, or made by dotted keys
 	closed  bool // a table in braces
 	partial bool // a line of the table could not be read
 }
@@ -65,64 +65,62 @@ func (g *grower) fault(code Code, at Place, path []string, what, remedy string) 
 }
 
 func (g *grower) statement(st statement) {
-	start := g.cursor.at(st.start)
 	if st.deep {
+		start := g.cursor.at(st.start)
 		g.fault(Nesting, start, nil, "nested too deeply", fmt.Sprintf("at most %d tables or lists within each other", deepest))
 		g.unread(st, start)
 		return
 	}
-	d, bad := decode(g.text[st.start:st.end])
+	d, bad := st.decode(g.text)
 	switch {
 	case bad != nil:
-		g.syntax(st, bad)
-		g.unread(st, start)
+		g.unread(st, g.syntax(st, bad))
 	case st.kind == pair:
 		g.pair(g.context, st.entry, 0, d, d.values)
 	default:
-		g.header(d.path(), st.kind, start)
+		g.header(d.path(), st.kind, g.cursor.at(st.start))
 	}
 }
 
-// syntax reports a statement that the TOML library refused.
-func (g *grower) syntax(st statement, bad *unreadable) {
-	at := g.cursor.at(g.objection(st, bad))
+// syntax reports a statement that the TOML library refused, and tells where.
+func (g *grower) syntax(st statement, bad *unreadable) Place {
+	if inner, ok := bad.repeated(); ok {
+		at := g.cursor.at(st.start + bad.offset)
+		g.fault(Twice, at, g.under(inner), "given a second time between the same braces", "keep one")
+		return at
+	}
 	var key []string
 	if path := plainPath(g.text[st.entry.start:st.entry.end]); st.kind == pair && path != nil {
 		key = g.under(path)
 	}
-	if inner, ok := bad.repeated(); ok {
-		g.fault(Twice, at, g.under(inner), "given a second time between the same braces", "keep one")
-		return
-	}
-	what, remedy := st.diagnosis(g.text, bad.message)
-	g.fault(Syntax, at, key, what, remedy)
-}
-
-// objection is the offset that a fault of syntax points at: for brackets and quotes
-// that are not closed, where they open.
-func (g *grower) objection(st statement, bad *unreadable) int {
-	switch value := st.entry.value; {
-	case st.kind != pair:
-		return st.start
-	case st.broken && value.end > value.start:
-		return value.start
-	}
-	return min(st.start+bad.offset, st.end)
+	d := st.diagnose(g.text, bad)
+	at := g.cursor.at(d.offset)
+	g.fault(Syntax, at, key, d.what, d.remedy)
+	return at
 }
 
 // unread takes from an illegible statement what its key gives away, so that no key
-// is called missing that only could not be read.
-func (g *grower) unread(st statement, start Place) {
+// is called missing that only could not be read. It stands where its fault is.
+func (g *grower) unread(st statement, at Place) {
 	path := plainPath(g.text[st.entry.start:st.entry.end])
 	switch {
 	case st.kind != pair && path != nil:
-		g.header(path, st.kind, start)
+		g.header(path, st.kind, at)
 	case st.kind != pair:
 		g.context = &node{kind: table}
-	case path != nil:
-		g.attach(g.context, path, 0, start, &node{kind: illegible, place: start})
+	case path != nil && st.entry.value.end > st.entry.value.start:
+		g.claim(path, at)
 	default:
 		g.context.partial = true
+	}
+}
+
+// claim notes that a key was given, though not legibly.
+func (g *grower) claim(path []string, at Place) {
+	last := len(path) - 1
+	into, _ := g.context.descend(path[:last], at)
+	if into != nil && into.children[path[last]] == nil {
+		into.put(path[last], at, &node{kind: illegible, place: at})
 	}
 }
 
@@ -160,23 +158,32 @@ func (g *grower) value(e element, depth int, d *decoded, value any) *node {
 // attach hangs a child into a table under what follows the first depth names of a path.
 func (g *grower) attach(into *node, path []string, depth int, key Place, child *node) {
 	last := len(path) - 1
-	for _, name := range path[depth:last] {
-		next := into.children[name]
-		if next == nil {
-			next = &node{kind: table, place: key}
-			into.put(name, key, next)
-		}
-		if next.kind != table || next.closed {
-			g.twice(key, g.under(path), next)
-			return
-		}
-		into = next
+	into, there := into.descend(path[depth:last], key)
+	if into != nil {
+		there = into.children[path[last]]
 	}
-	if there := into.children[path[last]]; there != nil {
+	if there != nil {
 		g.twice(key, g.under(path), there)
 		return
 	}
 	into.put(path[last], key, child)
+}
+
+// descend follows the names before the last of a dotted key, making tables on the
+// way; where something else is in the way it returns that instead.
+func (n *node) descend(names []string, key Place) (into, inTheWay *node) {
+	for _, name := range names {
+		next := n.children[name]
+		if next == nil {
+			next = &node{kind: table, place: key, headed: true}
+			n.put(name, key, next)
+		}
+		if next.kind != table || next.closed {
+			return nil, next
+		}
+		n = next
+	}
+	return n, nil
 }
 
 func (g *grower) under(path []string) []string {

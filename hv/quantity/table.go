@@ -10,7 +10,7 @@ var (
 	frequency      = &Dimension{Name: "frequency", SI: "Hz", Example: "38 kHz", prefixed: true, units: decades("Hz", "- k M G m")}
 	length         = &Dimension{Name: "length", SI: "m", Example: "60 mm", prefixed: true, units: decades("m", "m c - u n p k")}
 	charge         = &Dimension{Name: "charge", SI: "C", Example: "45 uC", prefixed: true, units: decades("C", "- m u n p f")}
-	energy         = &Dimension{Name: "energy", SI: "J", Example: "1 J", prefixed: true, units: decades("J", "- m u n k")}
+	energy         = &Dimension{Name: "energy", SI: "J", Example: "1 J", prefixed: true, units: decades("J", "- m u n k M")}
 	electronEnergy = &Dimension{Name: "electron energy", SI: "eV", Example: "1.5 eV", prefixed: true, units: decades("eV", "- m k M")}
 	power          = &Dimension{Name: "power", SI: "W", Example: "500 mW", prefixed: true, units: decades("W", "- m u n k M")}
 

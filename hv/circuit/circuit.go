@@ -154,3 +154,14 @@ func (c *Circuit) Doubt() error {
 	}
 	return nil
 }
+
+// DiodeRating is the rated reverse voltage of a diode and where it is given.
+func (e *Element) DiodeRating() (quantity.Voltage, document.Place) {
+	if e.DiodePart != nil {
+		return e.DiodePart.RatedVoltage.V, e.DiodePart.RatedVoltage.Place
+	}
+	if e.LoosePart != nil {
+		return e.LoosePart.RatedVoltage.V, e.LoosePart.RatedVoltage.Place
+	}
+	return 0, document.Place{Key: "multiplier.diode.rated_voltage"}
+}

@@ -1,0 +1,81 @@
+// Package evidence gathers what is computed for one chain. Everything goes through
+// Under(condition): states, tolerance corners, drive levels and faults are
+// conditions, not code paths. It holds no formula and gives no verdict; what it has
+// computed it remembers for one review.
+package evidence
+
+import (
+	"strings"
+
+	"kilovet/hv/circuit"
+)
+
+// State of a chain.
+type State string
+
+// The states.
+const (
+	Working State = "working" // as described
+	Cold    State = "cold"    // no emission: lowest load, no self-bias
+	Lost    State = "lost"    // regulation lost: drive at its limit, no emission
+)
+
+// States lists them in the order of print.
+var States = []State{Working, Cold, Lost}
+
+// Corner is a corner of the tolerances.
+type Corner string
+
+// The corners: every part at its nominal value, or all at one end of their
+// tolerance; in a corner the divider reads low by its error, so that regulation
+// holds the output too high.
+const (
+	Nominal Corner = ""
+	AllLow  Corner = "all parts at the low end of their tolerance"
+	AllHigh Corner = "all parts at the high end of their tolerance"
+)
+
+// Corners lists them.
+var Corners = []Corner{Nominal, AllLow, AllHigh}
+
+// Fault is a change of the circuit.
+type Fault struct {
+	Name string
+	Edit func(*circuit.Circuit) *circuit.Circuit
+}
+
+// Condition is what a chain is computed under.
+type Condition struct {
+	State  State
+	Corner Corner
+	// Drive is the share of the state's drive, 1 where zero.
+	Drive float64
+	Fault Fault
+}
+
+// Text says the condition in words.
+func (c Condition) Text() string {
+	words := []string{string(c.State)}
+	if c.Corner != Nominal {
+		words = append(words, string(c.Corner))
+	}
+	if c.Fault.Name != "" {
+		words = append(words, c.Fault.Name)
+	}
+	return strings.Join(words, ", ")
+}
+
+// key tells conditions apart; a fault is known by its name.
+func (c Condition) key() conditionKey {
+	if c.Drive == 0 {
+		c.Drive = 1
+	}
+	return conditionKey{c.State, c.Corner, c.Drive, c.Fault.Name}
+}
+
+type conditionKey struct {
+	state  State
+	corner Corner
+	drive  float64
+	fault  string
+}

@@ -1,0 +1,150 @@
+package evidence
+
+import (
+	"math"
+
+	"kilovet/hv/circuit"
+	"kilovet/hv/lack"
+	"kilovet/hv/quantity"
+)
+
+// Peak is the peak of the drive under the condition: with regulation what holds the
+// set voltage, as far as the drive goes; with regulation lost the limit.
+func (e *Evidence) Peak() (quantity.Voltage, error) {
+	return remember(e, "peak", func() (quantity.Voltage, error) {
+		peak, err := e.fullPeak()
+		if d := e.condition.Drive; d != 0 {
+			peak *= quantity.Voltage(d)
+		}
+		return peak, err
+	})
+}
+
+func (e *Evidence) fullPeak() (quantity.Voltage, error) {
+	d := e.chain.Drive
+	switch {
+	case e.condition.State == Lost:
+		return e.limit()
+	case e.chain.Regulation == nil:
+		return d.Peak.V, nil
+	}
+	needed, err := e.PeakNeeded()
+	return min(needed, d.Peak.V), err
+}
+
+// limit is the most the drive can reach; in an open loop that is its peak where
+// nothing more is stated.
+func (e *Evidence) limit() (quantity.Voltage, error) {
+	d := e.chain.Drive
+	if d.PeakLimit.Set() || e.chain.Regulation != nil {
+		return d.PeakLimit.Need()
+	}
+	return d.Peak.V, nil
+}
+
+// PeakNeeded is the peak of the drive that holds the set voltage at the sensed node.
+// In a corner the divider reads low by its error and the voltage is held too high.
+func (e *Evidence) PeakNeeded() (quantity.Voltage, error) {
+	if e.chain.Regulation == nil {
+		return 0, lack.Key("regulation")
+	}
+	return remember(e, "peak needed", func() (quantity.Voltage, error) {
+		set, err := e.held()
+		if err != nil {
+			return 0, err
+		}
+		return e.peakFor(set)
+	})
+}
+
+// held is the voltage that regulation really holds at the sensed node.
+func (e *Evidence) held() (quantity.Voltage, error) {
+	set := e.chain.Regulation.Set.V
+	if e.condition.Corner == Nominal {
+		return set, nil
+	}
+	nominal := e.condition
+	nominal.Corner = Nominal
+	wrong, err := e.Under(nominal).DividerError()
+	return set * quantity.Voltage(1+wrong), err
+}
+
+// peakFor finds the peak for a mean at the sensed node by the secant method; the
+// mean is all but proportional to the peak.
+func (e *Evidence) peakFor(set quantity.Voltage) (quantity.Voltage, error) {
+	const good, tries = 1e-10, 12
+	node := e.chain.Divider.Senses.Or("output")
+	a := e.chain.Drive.Peak.V
+	va, err := e.meanAt(a, node)
+	if err != nil {
+		return 0, err
+	}
+	if va <= 0 {
+		return 0, lack.Failed("the load pulls %s to nothing at full drive", node)
+	}
+	b := a * set / va
+	for range tries {
+		vb, err := e.meanAt(b, node)
+		if err != nil {
+			return 0, err
+		}
+		if math.Abs(float64(vb/set-1)) < good || vb == va {
+			return b, nil
+		}
+		a, b, va = b, b+(set-vb)*(b-a)/(vb-va), vb
+	}
+	return 0, lack.Failed("no drive was found that holds %s at %s", quantity.Text(set), node)
+}
+
+// meanAt is the magnitude of a node's mean for a trial peak.
+func (e *Evidence) meanAt(peak quantity.Voltage, node string) (quantity.Voltage, error) {
+	c, err := e.circuitAt(peak)
+	if err != nil {
+		return 0, err
+	}
+	w, err := e.solve(c)
+	if err != nil {
+		return 0, err
+	}
+	v, err := w.mean(node)
+	if c.Negative {
+		v = -v
+	}
+	return v, err
+}
+
+// Circuit is the circuit under the condition.
+func (e *Evidence) Circuit() (*circuit.Circuit, error) {
+	if !e.HasSupply() {
+		return nil, lack.Key("drive", "multiplier")
+	}
+	return remember(e, "circuit", func() (*circuit.Circuit, error) {
+		peak, err := e.Peak()
+		if err != nil {
+			return nil, err
+		}
+		return e.circuitAt(peak)
+	})
+}
+
+func (e *Evidence) circuitAt(peak quantity.Voltage) (*circuit.Circuit, error) {
+	emission, err := e.Emission()
+	if err != nil {
+		return nil, err
+	}
+	c := circuit.Build(e.chain, circuit.Setting{Peak: peak, Emission: emission, Corner: e.corner()})
+	if e.condition.Fault.Edit != nil {
+		c = e.condition.Fault.Edit(c)
+	}
+	return c, c.Doubt()
+}
+
+func (e *Evidence) corner() func(string, quantity.Fraction) float64 {
+	switch e.condition.Corner {
+	case AllLow:
+		return func(_ string, t quantity.Fraction) float64 { return 1 - float64(t) }
+	case AllHigh:
+		return func(_ string, t quantity.Fraction) float64 { return 1 + float64(t) }
+	}
+	return nil
+}

@@ -1,0 +1,191 @@
+package evidence
+
+import (
+	"kilovet/hv/circuit"
+	"kilovet/hv/lack"
+	"kilovet/hv/quantity"
+	"kilovet/hv/steady"
+)
+
+// means are the mean potentials of all nodes.
+func (e *Evidence) means() (steady.Voltages, error) {
+	return remember(e, "means", func() (steady.Voltages, error) {
+		c, err := e.Circuit()
+		if err != nil {
+			return nil, err
+		}
+		s, err := e.solution()
+		if err != nil {
+			return nil, err
+		}
+		v := make(steady.Voltages, c.Nodes())
+		for n := 1; n < c.Nodes(); n++ {
+			if v[n], err = s.mean(c.Labels(circuit.Node(n))[0]); err != nil {
+				return nil, err
+			}
+		}
+		return v, nil
+	})
+}
+
+// Stored is the energy of one part.
+type Stored struct {
+	Name   string
+	Energy quantity.Energy
+}
+
+// StoredByPart is the energy in every capacitor.
+func (e *Evidence) StoredByPart() ([]Stored, error) {
+	c, err := e.Circuit()
+	if err != nil {
+		return nil, err
+	}
+	v, err := e.means()
+	if err != nil {
+		return nil, err
+	}
+	var all []Stored
+	for _, s := range steady.Stores(c, v) {
+		all = append(all, Stored{s.Element, s.Energy})
+	}
+	return all, nil
+}
+
+// StoredEnergy is the energy in the whole chain.
+func (e *Evidence) StoredEnergy() (quantity.Energy, error) {
+	c, err := e.Circuit()
+	if err != nil {
+		return 0, err
+	}
+	v, err := e.means()
+	if err != nil {
+		return 0, err
+	}
+	return steady.Energy(c, v)
+}
+
+// Short is what a short to ground at a node delivers.
+type Short struct {
+	Charge quantity.Charge
+	Energy quantity.Energy
+}
+
+// ShortAt is what an ideal short at a node delivers, drive and loads off.
+func (e *Evidence) ShortAt(node string) (Short, error) {
+	return remember(e, "short at "+e.canonical(node), func() (Short, error) {
+		c, err := e.Circuit()
+		if err != nil {
+			return Short{}, err
+		}
+		v, err := e.means()
+		if err != nil {
+			return Short{}, err
+		}
+		d, err := steady.Short(c, v, node)
+		return Short{d.Charge, d.Energy}, err
+	})
+}
+
+// canonical is the first name of a node.
+func (e *Evidence) canonical(node string) string {
+	n, ok := e.Layout().Node(node)
+	if !ok {
+		return node
+	}
+	return e.Layout().Labels(n)[0]
+}
+
+// IsGround reports whether a name is one of ground's.
+func (e *Evidence) IsGround(node string) bool {
+	n, ok := e.Layout().Node(node)
+	return ok && n == circuit.Ground
+}
+
+// ArcVoltage is the voltage that an arc at the gun puts across a series resistor:
+// the full voltage of its end away from the gun, or what a clamp across it lets stand.
+func (e *Evidence) ArcVoltage(resistor string) (quantity.Voltage, error) {
+	if resistor == "bias.resistor" && e.chain.Bias.Clamp != nil {
+		return e.chain.Bias.Clamp.Voltage.V, nil
+	}
+	from, to := e.Layout().Element(resistor).Ends()
+	a, err := e.Between(from, "ground")
+	if err != nil {
+		return 0, err
+	}
+	b, err := e.Between(to, "ground")
+	return max(a, b), err
+}
+
+// ArcEnergy is the most that an arc at the gun can turn into heat in a series
+// resistor: all that a short at the output releases.
+func (e *Evidence) ArcEnergy(string) (quantity.Energy, error) {
+	s, err := e.ShortAt("output")
+	return s.Energy, err
+}
+
+// ShortCurrent is the current that the supply drives into a lasting short at a node.
+func (e *Evidence) ShortCurrent(node string) (quantity.Current, error) {
+	return 0, lack.Failed("the current into a lasting short at %s is not computed", node)
+}
+
+// Discharge is how long a node stays above 60 V after switching off.
+type Discharge struct {
+	Node  string
+	Time  quantity.Time
+	Never bool
+	Left  quantity.Voltage // what stays, where it never falls below
+}
+
+// Slower reports whether this discharge ends after the other.
+func (d Discharge) Slower(o Discharge) bool {
+	switch {
+	case d.Never != o.Never:
+		return d.Never
+	case d.Never:
+		return d.Left > o.Left
+	}
+	return d.Time > o.Time || o.Node == ""
+}
+
+func discharge(x steady.Ending) Discharge {
+	return Discharge{x.Of, x.Time, x.Never, magnitude(x.Rest)}
+}
+
+func (e *Evidence) decay() (*steady.Decay, error) {
+	return remember(e, "decay", func() (*steady.Decay, error) {
+		c, err := e.Circuit()
+		if err != nil {
+			return nil, err
+		}
+		v, err := e.means()
+		if err != nil {
+			return nil, err
+		}
+		return steady.Discharge(c, v, discharged)
+	})
+}
+
+// DischargeOf is the discharge of one node to 60 V through what is permanent.
+func (e *Evidence) DischargeOf(node string) (Discharge, error) {
+	d, err := e.decay()
+	if err != nil {
+		return Discharge{}, err
+	}
+	x, err := d.Node(node)
+	return discharge(x), err
+}
+
+// SlowestDischarge is the discharge of the node that stays charged longest.
+func (e *Evidence) SlowestDischarge() (Discharge, error) {
+	d, err := e.decay()
+	if err != nil {
+		return Discharge{}, err
+	}
+	return discharge(d.Slowest()), nil
+}
+
+// Residue is what an intact ladder keeps when its top is discharged.
+func (e *Evidence) Residue() (quantity.Voltage, error) { return steady.Residue(e.chain.Multiplier) }
+
+// discharged is the voltage to which discharge times are given.
+const discharged quantity.Voltage = 60

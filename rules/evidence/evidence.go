@@ -1,0 +1,115 @@
+package evidence
+
+import (
+	"sync"
+
+	"kilovet/hv/chain"
+	"kilovet/hv/circuit"
+	"kilovet/hv/quantity"
+)
+
+// Evidence is what is computed for a chain under one condition. Values for other
+// conditions come from Under and share its memory.
+type Evidence struct {
+	chain     *chain.Chain
+	condition Condition
+	memory    *memory
+}
+
+// New starts the evidence for a chain in working state, with an empty memory.
+func New(c *chain.Chain) *Evidence {
+	return &Evidence{chain: c, condition: Condition{State: Working}, memory: &memory{known: map[memoryKey]any{}}}
+}
+
+// Under is the evidence for the same chain under another condition.
+func (e *Evidence) Under(c Condition) *Evidence {
+	return &Evidence{chain: e.chain, condition: c, memory: e.memory}
+}
+
+// In is the evidence in another state, otherwise under the same condition.
+func (e *Evidence) In(s State) *Evidence {
+	c := e.condition
+	c.State = s
+	return e.Under(c)
+}
+
+// Chain is the description.
+func (e *Evidence) Chain() *chain.Chain { return e.chain }
+
+// Condition is what this evidence is computed under.
+func (e *Evidence) Condition() Condition { return e.condition }
+
+// HasSupply reports whether a drive and a multiplier are described.
+func (e *Evidence) HasSupply() bool { return e.chain.Multiplier != nil && e.chain.Drive != nil }
+
+// Layout is the circuit as described, for what is connected to what; its drive and
+// emission are those of no particular state.
+func (e *Evidence) Layout() *circuit.Circuit {
+	if !e.HasSupply() {
+		return &circuit.Circuit{}
+	}
+	c, _ := remember(e.Under(Condition{}), "layout", func() (*circuit.Circuit, error) {
+		return circuit.Build(e.chain, circuit.Setting{Peak: e.chain.Drive.Peak.V}), nil
+	})
+	return c
+}
+
+// Nodes lists the nodes a person would name, one name each where several share a
+// node, ground left out.
+func (e *Evidence) Nodes() []string {
+	if !e.HasSupply() {
+		return nil
+	}
+	nodes, _ := remember(e.Under(Condition{}), "nodes", func() ([]string, error) { return e.distinct(), nil })
+	return nodes
+}
+
+// distinct keeps one name for each node of the circuit that a description may name.
+func (e *Evidence) distinct() []string {
+	var names []string
+	seen := map[circuit.Node]bool{circuit.Ground: true}
+	for _, name := range e.chain.Nodes() {
+		n, ok := e.Layout().Node(name)
+		if ok && !seen[n] {
+			seen[n] = true
+			names = append(names, name)
+		}
+	}
+	return names
+}
+
+// memory holds what was computed, by condition and name, for one review.
+type memory struct {
+	lock  sync.Mutex
+	known map[memoryKey]any
+}
+
+type memoryKey struct {
+	condition conditionKey
+	name      string
+}
+
+type outcome[T any] struct {
+	value T
+	err   error
+}
+
+// remember computes a value once for each condition.
+func remember[T any](e *Evidence, name string, compute func() (T, error)) (T, error) {
+	key := memoryKey{e.condition.key(), name}
+	e.memory.lock.Lock()
+	known, ok := e.memory.known[key].(outcome[T])
+	e.memory.lock.Unlock()
+	if ok {
+		return known.value, known.err
+	}
+	var o outcome[T]
+	o.value, o.err = compute()
+	e.memory.lock.Lock()
+	e.memory.known[key] = o
+	e.memory.lock.Unlock()
+	return o.value, o.err
+}
+
+// magnitude is the size of a signed voltage.
+func magnitude(v quantity.Voltage) quantity.Voltage { return max(v, -v) }

@@ -1,0 +1,223 @@
+package evidence
+
+import (
+	"math"
+	"math/cmplx"
+
+	"kilovet/hv/circuit"
+	"kilovet/hv/lack"
+	"kilovet/hv/quantity"
+	"kilovet/ripple/phasor"
+)
+
+// harmonics is how many multiples of the drive frequency are followed to the
+// cathode; behind a filter they fall at least as the square of their order.
+const harmonics = 48
+
+// Line is one frequency at the cathode or across the bias, as complex amplitudes.
+type Line struct {
+	Frequency     quantity.Frequency
+	Cathode, Bias complex128
+}
+
+// DriveLines are drive frequency and harmonics at the cathode: those of the
+// multiplier through filter, cable, bias and floating supply, and what strays pick up.
+func (e *Evidence) DriveLines() ([]Line, error) {
+	return remember(e, "drive lines", func() ([]Line, error) {
+		s, err := e.solution()
+		if err != nil {
+			return nil, err
+		}
+		var lines []Line
+		for k := 1; k <= harmonics; k++ {
+			x, err := e.driven(s, k)
+			if err != nil {
+				return nil, err
+			}
+			l, err := e.line(e.chain.Drive.Frequency.V*quantity.Frequency(k), x)
+			if err != nil {
+				return nil, err
+			}
+			lines = append(lines, l)
+		}
+		return lines, nil
+	})
+}
+
+// driven holds the multiplier's top and the top of its coupling columns at their
+// harmonic of order k.
+func (e *Evidence) driven(s solution, k int) (phasor.Excitation, error) {
+	c, err := e.Circuit()
+	if err != nil {
+		return phasor.Excitation{}, err
+	}
+	x := phasor.Excitation{Extra: e.gunSlope()}
+	for _, node := range e.tops(c) {
+		v, err := s.harmonic(node, "ground", k)
+		if err != nil {
+			return x, err
+		}
+		x.Nodes = append(x.Nodes, phasor.Driven{Node: node, Voltage: phasor.Phasor(v)})
+	}
+	return x, nil
+}
+
+// tops are the nodes of the multiplier from which anything outside it starts.
+func (e *Evidence) tops(c *circuit.Circuit) []string {
+	nodes := []string{"multiplier"}
+	if pick := c.Element("stray.pickup"); pick != nil {
+		from, _ := pick.Ends()
+		nodes = append(nodes, from)
+	}
+	return nodes
+}
+
+// gunSlope loads cathode to control electrode with n I/(cutoff − bias) where that is
+// known; else the gun is a constant current and loads nothing.
+func (e *Evidence) gunSlope() []phasor.Transfer {
+	p, err := e.Gun()
+	if err != nil || e.chain.Bias == nil {
+		return nil
+	}
+	return []phasor.Transfer{phasor.Conductance("cathode", "control", float64(p.Transconductance()))}
+}
+
+func (e *Evidence) line(f quantity.Frequency, x phasor.Excitation) (Line, error) {
+	c, err := e.Circuit()
+	if err != nil {
+		return Line{}, err
+	}
+	r, err := phasor.Solve(c, f, x)
+	if err != nil {
+		return Line{}, err
+	}
+	cathode, err := r.At("cathode")
+	if err != nil {
+		return Line{}, err
+	}
+	bias := phasor.Phasor(0)
+	if _, ok := c.Node("control"); ok {
+		bias, err = r.Between("cathode", "control")
+	}
+	return Line{f, complex128(cathode), complex128(bias)}, err
+}
+
+// Hum is the mains' common mode at the cathode through the heater feed; the
+// multiplier stands for its capacitors and its output resistance meanwhile.
+func (e *Evidence) Hum() (Line, error) {
+	return remember(e, "hum", func() (Line, error) {
+		f, err := e.humFeed()
+		if err != nil || f == 0 {
+			return Line{}, err
+		}
+		out, err := e.outputConductance()
+		if err != nil {
+			return Line{}, err
+		}
+		extra := append(e.gunSlope(), phasor.Conductance("multiplier", "ground", out))
+		return e.line(f, phasor.Excitation{Source: "mains", Ladder: true, Extra: extra})
+	})
+}
+
+// humFeed is the frequency of the hum; zero where nothing carries any.
+func (e *Evidence) humFeed() (quantity.Frequency, error) {
+	h := e.chain.Heater
+	if h == nil || h.Feed != nil && h.Feed.Kind.V == "battery" {
+		return 0, nil
+	}
+	if h.Feed == nil {
+		return 0, lack.Key("heater.feed")
+	}
+	if !h.Feed.Capacitance.Set() || !h.Feed.CommonMode.Set() {
+		return 0, lack.Because("hum rests on capacitance and common mode of the heater feed", h.Feed.Capacitance.Key, h.Feed.CommonMode.Key)
+	}
+	if e.chain.Site == nil {
+		return 0, lack.Key("site.mains_frequency")
+	}
+	return e.chain.Site.MainsFrequency.Need()
+}
+
+// outputConductance is one over the output resistance of the multiplier.
+func (e *Evidence) outputConductance() (float64, error) {
+	c, err := e.Cascade()
+	if err != nil {
+		return 0, err
+	}
+	supply, err := c.Supply()
+	return 1 / float64(supply.OutputResistance), err
+}
+
+// peakToPeak is the swing of a sum of harmonics of one fundamental, the k-th at index k−1.
+func peakToPeak(amplitudes []complex128) quantity.Voltage {
+	const samples = 1024
+	least, most := math.Inf(1), math.Inf(-1)
+	for i := range samples {
+		turn := cmplx.Exp(complex(0, 2*math.Pi*float64(i)/samples))
+		v, w := 0.0, turn
+		for _, a := range amplitudes {
+			v += real(a * w)
+			w *= turn
+		}
+		least, most = math.Min(least, v), math.Max(most, v)
+	}
+	return quantity.Voltage(most - least)
+}
+
+func pick(lines []Line, of func(Line) complex128) []complex128 {
+	all := make([]complex128, len(lines))
+	for i, l := range lines {
+		all[i] = of(l)
+	}
+	return all
+}
+
+// CathodeRipple is the ripple at the cathode at the drive frequency and its
+// harmonics, peak to peak.
+func (e *Evidence) CathodeRipple() (quantity.Voltage, error) {
+	lines, err := e.DriveLines()
+	return peakToPeak(pick(lines, func(l Line) complex128 { return l.Cathode })), err
+}
+
+// BiasRipple is the ripple across the bias, peak to peak, hum included.
+func (e *Evidence) BiasRipple() (quantity.Voltage, error) {
+	lines, err := e.DriveLines()
+	if err != nil {
+		return 0, err
+	}
+	return peakToPeak(pick(lines, func(l Line) complex128 { return l.Bias })), nil
+}
+
+// CathodeHum is the hum at the cathode, peak to peak.
+func (e *Evidence) CathodeHum() (quantity.Voltage, error) {
+	l, err := e.Hum()
+	return quantity.Voltage(2 * cmplx.Abs(l.Cathode)), err
+}
+
+// CathodeDisturbance is the linear sum of ripple and hum.
+func (e *Evidence) CathodeDisturbance() (quantity.Voltage, error) {
+	ripple, err := e.CathodeRipple()
+	if err != nil {
+		return 0, err
+	}
+	hum, err := e.CathodeHum()
+	return ripple + hum, err
+}
+
+// RippleAssumptions are what the disturbance takes for granted.
+func (e *Evidence) RippleAssumptions() []string {
+	var all []string
+	c := e.chain
+	for _, f := range c.Filters {
+		if !f.BypassCapacitance.Set() {
+			all = append(all, "stray across each filter resistor "+quantity.Text(circuit.AssumedBypass)+" (common practice, no source)")
+			break
+		}
+	}
+	if c.Multiplier != nil && len(c.Filters) > 0 && !c.Multiplier.PickupToOutput.Set() {
+		all = append(all, "pickup from coupling column to output "+quantity.Text(circuit.AssumedPickup)+" (common practice, no source)")
+	}
+	if h := c.Heater; h != nil && h.Feed != nil && h.Feed.Screen.V && h.Feed.CommonMode.V > 0 {
+		all = append(all, "the screen of the heater feed divides the common mode by 1000")
+	}
+	return all
+}

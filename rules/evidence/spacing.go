@@ -1,0 +1,128 @@
+package evidence
+
+import (
+	"kilovet/hv/chain"
+	"kilovet/hv/circuit"
+	"kilovet/hv/quantity"
+	"kilovet/insulation"
+	"kilovet/insulation/gap"
+)
+
+// Spacing is a spacing with the voltages across it and what is known of it.
+type Spacing struct {
+	Voltages   gap.Voltages
+	Under      Condition // where the peak occurs
+	Gap        gap.Gap
+	Assessment insulation.Assessment
+}
+
+// Spacing assesses a spacing at its highest voltage: the peak over all states and
+// corners, the lasting voltage over those that can stand for long.
+func (e *Evidence) Spacing(s *chain.Spacing) (Spacing, error) {
+	return remember(e.Under(Condition{}), "spacing "+s.Name.V, func() (Spacing, error) {
+		v, under, err := e.across(s)
+		if err != nil {
+			return Spacing{}, err
+		}
+		g := e.gap(s)
+		return Spacing{v, under, g, insulation.Assess(g, v)}, nil
+	})
+}
+
+func (e *Evidence) across(s *chain.Spacing) (gap.Voltages, Condition, error) {
+	if s.Voltage.Set() {
+		return gap.Voltages{Peak: s.Voltage.V, LongTerm: s.Voltage.V}, Condition{}, nil
+	}
+	live := append([]string{s.From.V}, s.Also.V...)
+	peak, err := Largest(e, Ratings(), live, func(e *Evidence, n string) (quantity.Voltage, error) { return e.Between(n, s.To.V) })
+	if err != nil {
+		return gap.Voltages{}, peak.Under, err
+	}
+	lasting, err := Largest(e, LongTerm(), live, func(e *Evidence, n string) (quantity.Voltage, error) { return e.RMS(n, s.To.V) })
+	if err != nil {
+		return gap.Voltages{}, peak.Under, err
+	}
+	v := gap.Voltages{Peak: peak.Value, LongTerm: lasting.Value, Sharp: e.polarity(s)}
+	err = e.alternating(s, live, &v)
+	return v, peak.Under, err
+}
+
+// polarity is that of the live side, taken as the sharper electrode, against the other.
+func (e *Evidence) polarity(s *chain.Spacing) gap.Polarity {
+	a, err := e.Potential(s.From.V)
+	b, err2 := e.Potential(s.To.V)
+	switch {
+	case err != nil || err2 != nil || a == b:
+		return gap.Unknown
+	case a < b:
+		return gap.Negative
+	}
+	return gap.Positive
+}
+
+// alternating adds the swing of a drive at or above 30 kHz.
+func (e *Evidence) alternating(s *chain.Spacing, live []string, v *gap.Voltages) error {
+	const high = 30e3
+	if e.chain.Drive.Frequency.V < high {
+		return nil
+	}
+	swing, err := Largest(e, Ratings(), live, func(e *Evidence, n string) (quantity.Voltage, error) { return e.Swing(n, s.To.V) })
+	v.Alternating, v.Frequency = swing.Value/2, e.chain.Drive.Frequency.V
+	return err
+}
+
+// gap turns a described spacing into what insulation reads; what was not given stays
+// so.
+func (e *Evidence) gap(s *chain.Spacing) gap.Gap {
+	g := gap.Gap{
+		Medium: gap.Medium(s.Medium.V), Insulation: gap.Insulation(s.Insulation.V),
+		Clearance: s.Clearance.V, Creepage: s.Creepage.V, Shape: shapeOf(s.Shape),
+		Material: s.Material.V, Temperature: s.Temperature.V, Pressure: s.Pressure.V,
+		GaugeFactor: s.GaugeFactor.V, Gas: gap.Gas(s.Gas.V), ImpulseTested: s.ImpulseTested.V, Mains: e.mains(s),
+	}
+	if s.CTI.Set() {
+		g.CTI = &s.CTI.V
+	}
+	if s.Humidity.Set() {
+		g.Humidity = &s.Humidity.V
+	}
+	if site := e.chain.Site; site != nil {
+		g.PollutionDegree = site.PollutionDegree.V
+		if site.Altitude.Set() {
+			g.Altitude = &site.Altitude.V
+		}
+		if !s.Temperature.Set() {
+			g.Temperature = site.AirTemperature.V
+		}
+	}
+	return g
+}
+
+func shapeOf(s *chain.Shape) *gap.Shape {
+	if s == nil {
+		return nil
+	}
+	return &gap.Shape{Kind: gap.Kind(s.Kind.V), InnerRadius: s.InnerRadius.V, OuterRadius: s.OuterRadius.V,
+		Radius: s.Radius.V, TipRadius: s.TipRadius.V, EdgeRadius: s.EdgeRadius.V, Symmetric: !s.Earthed.Or(true)}
+}
+
+// mains is the supply whose transients reach a spacing: that of one which touches
+// mains or drive.
+func (e *Evidence) mains(s *chain.Spacing) *gap.Mains {
+	touches := func(name string) bool {
+		n, ok := e.Layout().Node(name)
+		if !ok || n == circuit.Ground {
+			return false
+		}
+		for _, source := range []string{"mains", "drive", "drive.a", "drive.b"} {
+			if m, ok := e.Layout().Node(source); ok && m == n {
+				return true
+			}
+		}
+		return name == "mains"
+	}
+	if e.chain.Site == nil || !touches(s.From.V) && !touches(s.To.V) {
+		return nil
+	}
+	return &gap.Mains{LineToNeutral: e.chain.Site.Mains.V, Category: e.chain.Site.OvervoltageCategory.V, Secondary: s.From.V != "mains" && s.To.V != "mains"}
+}

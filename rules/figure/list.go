@@ -1,0 +1,104 @@
+package figure
+
+import "slices"
+
+// Declaration is one entry of the closed list: what an id means, in which unit,
+// and whether it is listed for every state.
+type Declaration struct {
+	ID      string
+	Unit    string
+	ByState bool
+	What    string
+	// Of says what the subject is; empty where there is none.
+	Of string
+}
+
+// Find looks an id up; it panics for an id that is not in the list.
+func Find(id string) Declaration {
+	i := slices.IndexFunc(List, func(d Declaration) bool { return d.ID == id })
+	if i < 0 {
+		panic("figure: not in the list: " + id)
+	}
+	return List[i]
+}
+
+// List is the closed list of figures, in the order in which they are printed.
+var List = []Declaration{
+	{"potential", "V", true, "mean potential to ground over a drive period", "node"},
+
+	{"multiplier.no_load", "V", true, "2 N (peak − forward drop)", ""},
+	{"multiplier.mean", "V", true, "mean at the top of the smoothing column", ""},
+	{"multiplier.maximum", "V", true, "largest magnitude at the top of the smoothing column", ""},
+	{"multiplier.minimum", "V", true, "smallest magnitude at the top of the smoothing column", ""},
+	{"multiplier.drop", "V", true, "no-load voltage less the mean", ""},
+	{"multiplier.drop_load", "V", true, "part of the drop due to the load", ""},
+	{"multiplier.drop_stray", "V", true, "part of the drop due to strays, junction capacitance and leakage", ""},
+	{"multiplier.drop_source", "V", true, "part of the drop due to source resistance, inductance and diode resistance", ""},
+	{"multiplier.ripple", "V", true, "ripple at the top of the smoothing column, peak to peak", ""},
+	{"multiplier.ripple_fundamental", "V", true, "amplitude of the ripple at the drive frequency", ""},
+	{"multiplier.ripple_second", "V", true, "amplitude of the ripple at twice the drive frequency", ""},
+	{"multiplier.diode_reverse_peak", "V", true, "largest reverse voltage on any diode position", ""},
+	{"multiplier.diode_current_peak", "A", true, "largest peak forward current of any diode", ""},
+	{"multiplier.capacitor_peak", "V", true, "largest voltage on any capacitor of the columns", ""},
+	{"multiplier.input_power", "W", true, "mean power delivered by the drive sources", ""},
+	{"multiplier.rise_time", "s", false, "from discharged at full drive to 95 % of the final mean", ""},
+	{"multiplier.drop_estimate", "V", true, "drop of the mean by charge balance, load only", ""},
+	{"multiplier.ripple_estimate", "V", true, "ripple by charge balance, peak to peak, load only", ""},
+	{"multiplier.stages_for_most_output", "1", true, "stages that would give the most output at this load", ""},
+
+	{"output.mean", "V", true, "mean voltage at the output", ""},
+	{"output.ripple", "V", true, "ripple at the output, peak to peak", ""},
+	{"cathode.ripple", "V", true, "ripple at the cathode at the drive frequency and its harmonics, peak to peak", ""},
+	{"cathode.hum", "V", true, "hum at the cathode at mains frequency, peak to peak", ""},
+	{"cathode.disturbance", "V", true, "linear sum of ripple and hum at the cathode, peak to peak", ""},
+	{"bias.voltage", "V", true, "cathode above control electrode", ""},
+	{"bias.ripple", "V", true, "ripple between cathode and control electrode, peak to peak", ""},
+	{"gun.emission", "A", true, "emission of the gun", ""},
+	{"gun.emission_law", "A", true, "emission that the stated law gives with the stated bias resistor", ""},
+	{"gun.loop_gain", "1", true, "by how much the bias resistor reduces a disturbance of the emission", ""},
+	{"gun.richardson_limit", "A", false, "most that the emitting area can give at its temperature", ""},
+	{"drive.peak_needed", "V", true, "drive, zero to peak, that holds the set voltage", ""},
+
+	{"divider.current", "A", true, "current in the upper arm", ""},
+	{"divider.ratio", "1", true, "sensed node over tap, meter connected", ""},
+	{"divider.reading", "V", true, "voltage at the meter", ""},
+	{"divider.error", "1", true, "error of the divider, worst case, relative", ""},
+	{"divider.dissipation", "W", true, "power in both arms", ""},
+	{"divider.element_dissipation", "W", true, "largest power in one element", ""},
+	{"divider.element_voltage", "V", true, "largest voltage across one element", ""},
+	{"divider.open_lower_arm", "V", true, "voltage of the tap, lower arm open, meter unplugged, no clamp", ""},
+	{"divider.open_lower_arm_metered", "V", true, "voltage of the tap, lower arm open, meter connected", ""},
+	{"divider.open_lower_arm_clamped", "V", true, "voltage of the tap, lower arm open, clamp conducting", ""},
+
+	{"beam.energy", "eV", true, "charge times cathode to final electrode", ""},
+	{"beam.wavelength", "m", true, "wavelength of the electrons", ""},
+	{"beam.width_source", "eV", true, "energy width of the source, central half", ""},
+	{"beam.width_ripple", "eV", true, "energy width of the disturbance, central half", ""},
+	{"beam.blur_chromatic", "m", true, "chromatic blur of the source alone, FW50", ""},
+	{"beam.blur_ripple", "m", true, "chromatic blur of the disturbance alone, FW50", ""},
+	{"beam.blur_spherical", "m", true, "spherical blur, FW50 in the best plane", ""},
+	{"beam.blur_diffraction", "m", true, "diffraction blur, FW50", ""},
+	{"beam.blur_total", "m", true, "whole spot, FW50, summed after Barth and Kruit", ""},
+	{"beam.banding", "1", true, "relative energy swing, peak to peak, too slow to blur: seen as banding", ""},
+	{"beam.ripple_allowed", "V", true, "disturbance at the cathode that would just use up the allowance, peak to peak", ""},
+
+	{"stored.energy", "J", true, "energy stored, whole chain or one part", "part"},
+	{"stored.charge", "C", true, "charge that a short delivers", "node"},
+	{"stored.energy_released", "J", true, "stored energy that a short sets free", "node"},
+	{"stored.discharge_time", "s", true, "from switching off to 60 V through what is permanent", "node"},
+	{"stored.residue", "V", false, "what an intact ladder keeps: (2 N − 1) forward drops", ""},
+
+	{"spacing.voltage", "V", false, "highest voltage across the spacing, peak", "spacing"},
+	{"spacing.clearance_needed", "m", false, "clearance needed", "spacing"},
+	{"spacing.creepage_needed", "m", false, "creepage distance needed", "spacing"},
+	{"spacing.breakdown_estimate", "V", false, "voltage at which the gap is expected to break down", "spacing"},
+	{"spacing.onset_estimate", "V", false, "voltage at which discharge is expected to begin", "spacing"},
+	{"spacing.field_peak", "V/m", false, "largest field on the electrodes", "spacing"},
+
+	{"field.peak", "V/m", false, "largest field on the electrode", "field/electrode"},
+	{"field.peak_r", "m", false, "distance of the largest field from the axis", "field/electrode"},
+	{"field.peak_z", "m", false, "height of the largest field", "field/electrode"},
+	{"field.capacitance", "F", false, "Maxwell coefficient of capacitance", "field/electrode/electrode"},
+	{"field.exponent", "1", false, "exponent of the field at a sharp edge or junction", "field/electrode"},
+	{"field.at", "V/m", false, "field at a probe", "field/probe"},
+}

@@ -1,0 +1,117 @@
+package rules
+
+import (
+	"kilovet/rules/evidence"
+	"kilovet/rules/figure"
+)
+
+// figures lists every figure of a chain that has a value.
+func figures(e *evidence.Evidence) []figure.Figure {
+	c := &collector{}
+	if e.HasSupply() {
+		for _, state := range evidence.States {
+			c.state = state
+			in := e.In(state)
+			potentials(c, in)
+			multiplier(c, in)
+			output(c, in)
+			divider(c, in)
+			stored(c, in)
+		}
+		c.state = evidence.Working
+		beam(c, e)
+		c.state = ""
+		once(c, e)
+	}
+	spacings(c, e)
+	return c.list
+}
+
+// potentials are listed under every name a node has.
+func potentials(c *collector, e *evidence.Evidence) {
+	for _, node := range e.Chain().Nodes() {
+		v, err := e.Potential(node)
+		add(c, "potential", node, e.Basis(), v, err)
+	}
+}
+
+func output(c *collector, e *evidence.Evidence) {
+	basis := e.Basis()
+	v, err := e.Potential("output")
+	add(c, "output.mean", "", basis, max(v, -v), err)
+	ripple, err := e.Swing("output", "ground")
+	add(c, "output.ripple", "", basis, ripple, err)
+	if e.Chain().HasCathode() {
+		const phasors = "ripple.phasor"
+		of(c, "cathode.ripple", "", phasors, e.CathodeRipple)
+		of(c, "cathode.hum", "", phasors, e.CathodeHum)
+		of(c, "cathode.disturbance", "", phasors, e.CathodeDisturbance)
+	}
+	if e.Chain().Bias != nil {
+		v, err := e.Potential("cathode")
+		w, err2 := e.Potential("control")
+		add(c, "bias.voltage", "", basis, v-w, first(err, err2))
+		of(c, "bias.ripple", "", "ripple.phasor", e.BiasRipple)
+	}
+	emission(c, e)
+	if e.Chain().Regulation != nil && c.state != evidence.Lost {
+		of(c, "drive.peak_needed", "", basis, e.PeakNeeded)
+	}
+}
+
+func first(errs ...error) error {
+	for _, err := range errs {
+		if err != nil {
+			return err
+		}
+	}
+	return nil
+}
+
+func emission(c *collector, e *evidence.Evidence) {
+	if e.Chain().Gun == nil {
+		return
+	}
+	basis := "as stated"
+	if !e.Chain().Gun.Emission.Set() {
+		basis = "hv.gun"
+	}
+	if c.state != evidence.Working {
+		basis = "no emission in this state"
+	}
+	of(c, "gun.emission", "", basis, e.Emission)
+	if c.state == evidence.Working {
+		of(c, "gun.emission_law", "", "hv.gun", e.EmissionByLaw)
+		if p, err := e.Gun(); err == nil {
+			c.number("gun.loop_gain", "", "hv.gun", p.LoopGain())
+		}
+	}
+}
+
+// divider lists what the divider reads and bears.
+func divider(c *collector, e *evidence.Evidence) {
+	d, err := e.Divider()
+	if err != nil {
+		return
+	}
+	const basis = "hv.steady"
+	of(c, "divider.current", "", basis, d.Current)
+	if ratio, err := d.Ratio(); err == nil {
+		c.number("divider.ratio", "", basis, ratio)
+	}
+	of(c, "divider.reading", "", basis, d.Reading)
+	of(c, "divider.error", "", basis, e.DividerError)
+	of(c, "divider.dissipation", "", basis, d.Dissipation)
+	of(c, "divider.element_dissipation", "", basis, d.ElementDissipation)
+	of(c, "divider.element_voltage", "", basis, d.ElementVoltage)
+	of(c, "divider.open_lower_arm", "", basis, d.OpenLowerArm)
+	of(c, "divider.open_lower_arm_metered", "", basis, d.OpenLowerArmMetered)
+	of(c, "divider.open_lower_arm_clamped", "", basis, d.OpenLowerArmClamped)
+}
+
+// once lists what does not depend on the state.
+func once(c *collector, e *evidence.Evidence) {
+	of(c, "gun.richardson_limit", "", "hv.gun", e.RichardsonLimit)
+	of(c, "stored.residue", "", "hv.steady", e.Residue)
+	of(c, "multiplier.rise_time", "", e.Basis(), e.RiseTime)
+}

@@ -1,0 +1,75 @@
+// Package optics judges the electron side: emission and blur.
+package optics
+
+import (
+	"fmt"
+	"math"
+
+	"kilovet/hv/quantity"
+	"kilovet/rules/evidence"
+	"kilovet/rules/rule"
+)
+
+var blurSource = rule.Source{Text: "Barth and Kruit, Optik 101 (1996) 101: sum of FW50 terms", Mark: rule.Memory, Governs: true}
+
+const blurMargin = 0.10
+
+var blur = rule.Rule{
+	ID: "beam.blur", Title: "Blur of the spot",
+	Demands: "The whole spot, ripple included, stays within the stated allowance.",
+	Applies: "Where [beam] states a blur allowance.",
+	Margin:  "marginal with less than 10 % in hand",
+	Concern: rule.Performance,
+	Sources: []rule.Source{blurSource},
+	Judge: func(e *evidence.Evidence) rule.Judgement {
+		b := e.Chain().Beam
+		if b == nil || !b.BlurAllowance.Set() {
+			return rule.Over("no blur allowance is stated")
+		}
+		f := rule.Finding{Rule: "beam.blur", Subject: "beam", Concern: rule.Performance, Relation: rule.AtMost, Place: b.BlurAllowance.Place,
+			Under: string(evidence.Working), Sources: []rule.Source{blurSource}, Remedy: "see beam.ripple_allowed: more filtering, or less source width, angle or aberration"}
+		total, err := e.BlurTotal()
+		if err != nil {
+			return one(f.Lacking(err))
+		}
+		f.Because = fmt.Sprintf("the spot is %s of the %s allowed (FW50)", quantity.Text(total), quantity.Text(b.BlurAllowance.V))
+		f = f.Most(rule.Of(total), rule.Of(b.BlurAllowance.V), blurMargin)
+		return one(f.Assume(e.RippleAssumptions()...).WithoutRemedyIfMet())
+	},
+}
+
+func one(f rule.Finding) rule.Judgement { return rule.Judgement{Findings: []rule.Finding{f}} }
+
+var lawSource = rule.Source{Text: "an emission read and an emission computed from the stated law agree within 10 %", Mark: rule.Practice, Governs: true}
+
+const (
+	lawTolerance   = 0.25
+	lawComfortable = 0.10
+)
+
+var emissionLaw = rule.Rule{
+	ID: "gun.emission_law", Title: "Emission against its law",
+	Demands: "A stated emission agrees with the one that the stated law and bias resistor give.",
+	Applies: "Where the gun states an emission as well as cutoff and zero-bias emission.",
+	Margin:  "marginal when more than 10 % apart, failing at 25 %",
+	Concern: rule.Performance,
+	Sources: []rule.Source{lawSource},
+	Judge: func(e *evidence.Evidence) rule.Judgement {
+		g := e.Chain().Gun
+		if !g.IsFitted() || !g.Emission.Set() || !g.Cutoff.Set() || !g.ZeroBiasEmission.Set() || e.Chain().Bias == nil {
+			return rule.Over("there is no emission to compare with a law")
+		}
+		f := rule.Finding{Rule: "gun.emission_law", Subject: "gun", Concern: rule.Performance, Relation: rule.AtMost, Place: g.Emission.Place,
+			Under: string(evidence.Working), Sources: []rule.Source{lawSource}, Remedy: "correct the emission, the cutoff, the scale of the law or the bias resistor"}
+		law, err := e.EmissionByLaw()
+		if err != nil {
+			return one(f.Lacking(err))
+		}
+		apart := quantity.Fraction(math.Abs(float64(law/g.Emission.V) - 1))
+		f.Because = fmt.Sprintf("stated %s, by the law %s", quantity.Text(g.Emission.V), quantity.Text(law))
+		return one(f.Most(rule.Of(apart), rule.Of(quantity.Fraction(lawTolerance)), lawTolerance/lawComfortable-1).WithoutRemedyIfMet())
+	},
+}
+
+// Rules lists the rules of this family.
+func Rules() []rule.Rule { return []rule.Rule{blur, emissionLaw} }

@@ -1,0 +1,47 @@
+package parts
+
+import (
+	"kilovet/hv/circuit"
+	"kilovet/hv/quantity"
+	"kilovet/rules/evidence"
+	"kilovet/rules/limits"
+	"kilovet/rules/rule"
+)
+
+func isDiode(el circuit.Element) bool { return el.Kind == circuit.Diode }
+
+var diodeReverse = rule.Rule{
+	ID: "diode.reverse_voltage", Title: "Diode reverse voltage",
+	Demands: "The largest reverse voltage on a diode position stays at or below 85 % of the rating of its stack.",
+	Applies: "Every diode.",
+	Margin:  "marginal above 70 % of the rating",
+	Concern: rule.Equipment,
+	Sources: []rule.Source{limits.DiodeReverse.Source},
+	Judge: func(e *evidence.Evidence) rule.Judgement {
+		return each(groups(e, isDiode), "no diode is described", func(g group) rule.Finding {
+			rated, at := g.elements[0].DiodeRating()
+			r := rating[quantity.Voltage]{what: "reverse voltage", rated: rated, given: at.Line > 0, key: at.Key,
+				derating: limits.DiodeReverse, conditions: evidence.Ratings(), stress: (*evidence.Evidence).ReversePeak}
+			return r.judge(e, g, about("diode.reverse_voltage", rule.Equipment, g, at))
+		})
+	},
+}
+
+var diodeCurrent = rule.Rule{
+	ID: "diode.mean_current", Title: "Diode mean current",
+	Demands: "The mean forward current of a diode stays at or below 80 % of its rating.",
+	Applies: "Every diode of the multiplier.",
+	Margin:  "marginal above 50 % of the rating",
+	Concern: rule.Equipment,
+	Sources: []rule.Source{limits.DiodeCurrent.Source},
+	Judge: func(e *evidence.Evidence) rule.Judgement {
+		return each(groups(e, hasDiodePart), "no multiplier diode is described", func(g group) rule.Finding {
+			rated := g.elements[0].DiodePart.RatedCurrent
+			r := rating[quantity.Current]{what: "mean current", rated: rated.V, given: rated.Set(), key: rated.Key,
+				derating: limits.DiodeCurrent, conditions: evidence.Ratings(), stress: (*evidence.Evidence).DiodeMean}
+			return r.judge(e, g, about("diode.mean_current", rule.Equipment, g, rated.Place))
+		})
+	},
+}
+
+func hasDiodePart(el circuit.Element) bool { return el.DiodePart != nil }

@@ -1,0 +1,74 @@
+// Package parts judges what the parts of a chain are rated for.
+package parts
+
+import (
+	"strings"
+
+	"kilovet/hv/circuit"
+	"kilovet/hv/document"
+	"kilovet/rules/evidence"
+	"kilovet/rules/rule"
+)
+
+// group is one described part with all the elements it stands for: a column of
+// capacitors is one part.
+type group struct {
+	subject  string
+	elements []circuit.Element
+}
+
+func (g group) names() []string {
+	names := make([]string, len(g.elements))
+	for i, e := range g.elements {
+		names[i] = e.Name
+	}
+	return names
+}
+
+// groups gathers the elements that a filter keeps, by described part, in order.
+func groups(e *evidence.Evidence, keep func(circuit.Element) bool) []group {
+	var all []group
+	at := map[string]int{}
+	for _, el := range e.Layout().Elements {
+		if !keep(el) {
+			continue
+		}
+		subject := partOf(el.Name)
+		i, known := at[subject]
+		if !known {
+			i = len(all)
+			at[subject] = i
+			all = append(all, group{subject: subject})
+		}
+		all[i].elements = append(all[i].elements, el)
+	}
+	return all
+}
+
+// partOf is the described part of an element: "multiplier.diode.a.3" is one of "multiplier.diode".
+func partOf(element string) string {
+	if fields := strings.Split(element, "."); fields[0] == "multiplier" || strings.HasPrefix(element, "heater.centre_resistors") {
+		return strings.Join(fields[:2], ".")
+	}
+	return element
+}
+
+// about starts a finding on a group with the place of the rating judged.
+func about(id string, concern rule.Concern, g group, at document.Place) rule.Finding {
+	if at.Line == 0 {
+		at.Line, at.Column = g.elements[0].Place.Line, g.elements[0].Place.Column
+	}
+	return rule.Finding{Rule: id, Subject: g.subject, Concern: concern, Place: at}
+}
+
+// each judges every group, or says that there is none.
+func each(all []group, none string, judge func(group) rule.Finding) rule.Judgement {
+	if len(all) == 0 {
+		return rule.Over(none)
+	}
+	var j rule.Judgement
+	for _, g := range all {
+		j.Findings = append(j.Findings, judge(g))
+	}
+	return j
+}

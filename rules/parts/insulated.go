@@ -1,0 +1,81 @@
+package parts
+
+import (
+	"kilovet/hv/document"
+	"kilovet/hv/quantity"
+	"kilovet/rules/evidence"
+	"kilovet/rules/limits"
+	"kilovet/rules/rule"
+)
+
+var cableVoltage = rule.Rule{
+	ID: "cable.voltage", Title: "Cable voltage",
+	Demands: "The cable is rated for the highest voltage of the chain.",
+	Applies: "Where a cable is described.",
+	Margin:  "marginal above 80 % of the rating",
+	Concern: rule.Life,
+	Sources: []rule.Source{limits.InsulationVoltage.Source},
+	Judge: func(e *evidence.Evidence) rule.Judgement {
+		cable := e.Chain().Cable
+		if cable == nil {
+			return rule.Over("no cable is described")
+		}
+		return insulated(e, "cable.voltage", "cable", "supply", "ground", cable.RatedVoltage)
+	},
+}
+
+var feedVoltage = rule.Rule{
+	ID: "feed.voltage", Title: "Heater feed voltage",
+	Demands: "The feed that carries the heater's power is rated for the highest voltage between its sides.",
+	Applies: "Where a heater feed other than a battery is described.",
+	Margin:  "marginal above 80 % of the rating",
+	Concern: rule.Life,
+	Sources: []rule.Source{limits.InsulationVoltage.Source},
+	Judge: func(e *evidence.Evidence) rule.Judgement {
+		h := e.Chain().Heater
+		if h == nil || h.Feed == nil || h.Feed.Kind.V == "battery" {
+			return rule.Over("no heater feed across the high voltage is described")
+		}
+		return insulated(e, "feed.voltage", "heater.feed", "cathode", "mains", h.Feed.RatedVoltage)
+	},
+}
+
+func insulated(e *evidence.Evidence, id, subject, from, to string, rated document.Given[quantity.Voltage]) rule.Judgement {
+	f := rule.Finding{Rule: id, Subject: subject, Concern: rule.Life, Place: rated.Place}
+	r := rating[quantity.Voltage]{what: "voltage", rated: rated.V, given: rated.Set(), key: rated.Key,
+		derating: limits.InsulationVoltage, conditions: evidence.Ratings(),
+		stress: func(e *evidence.Evidence, _ string) (quantity.Voltage, error) { return e.Between(from, to) }}
+	return rule.Judgement{Findings: []rule.Finding{r.judge(e, group{subject: subject, elements: one(subject)}, f)}}
+}
+
+var feedTest = rule.Rule{
+	ID: "feed.test_voltage", Title: "Heater feed test",
+	Demands: "The feed was tested with at least 1.2 times the highest voltage between its sides.",
+	Applies: "Where a heater feed other than a battery is described.",
+	Margin:  "marginal below 1.5 times the highest voltage",
+	Concern: rule.Life,
+	Sources: []rule.Source{limits.FeedTestSource},
+	Judge: func(e *evidence.Evidence) rule.Judgement {
+		h := e.Chain().Heater
+		if h == nil || h.Feed == nil || h.Feed.Kind.V == "battery" {
+			return rule.Over("no heater feed across the high voltage is described")
+		}
+		return rule.Judgement{Findings: []rule.Finding{judgeFeedTest(e, h.Feed.TestVoltage)}}
+	},
+}
+
+func judgeFeedTest(e *evidence.Evidence, test document.Given[quantity.Voltage]) rule.Finding {
+	f := rule.Finding{Rule: "feed.test_voltage", Subject: "heater.feed", Concern: rule.Life, Place: test.Place,
+		Relation: rule.AtLeast, Sources: []rule.Source{limits.FeedTestSource}, Remedy: "have the feed tested with a higher DC voltage, and state it"}
+	if !test.Set() {
+		return f.Lacking(missing(test.Key))
+	}
+	most, err := evidence.Largest(e, evidence.Ratings(), []string{"heater.feed"}, func(e *evidence.Evidence, _ string) (quantity.Voltage, error) { return e.Between("cathode", "mains") })
+	if err != nil {
+		return f.Lacking(err)
+	}
+	f.Under = most.Under.Text()
+	f.Because = "the feed stands up to " + quantity.Text(most.Value) + " and was tested with " + quantity.Text(test.V)
+	const comfortable = 1.5
+	return f.Least(rule.Of(test.V), rule.Of(most.Value*limits.FeedTest), comfortable/limits.FeedTest-1).WithoutRemedyIfMet()
+}

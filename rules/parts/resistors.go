@@ -1,0 +1,148 @@
+package parts
+
+import (
+	"fmt"
+
+	"kilovet/hv/circuit"
+	"kilovet/hv/lack"
+	"kilovet/hv/quantity"
+	"kilovet/rules/evidence"
+	"kilovet/rules/limits"
+	"kilovet/rules/rule"
+)
+
+func isResistor(el circuit.Element) bool { return el.ResistorPart != nil }
+
+var resistorVoltage = rule.Rule{
+	ID: "resistor.voltage", Title: "Resistor voltage",
+	Demands: "The voltage across each resistor element stays at or below 90 % of its rating.",
+	Applies: "Every resistor that the description gives as a part, in every state; arcs are judged apart.",
+	Margin:  "marginal above 80 % of the rating",
+	Concern: rule.Equipment,
+	Sources: []rule.Source{limits.ResistorVoltage.Source},
+	Judge: func(e *evidence.Evidence) rule.Judgement {
+		return each(groups(e, isResistor), "no resistor is described", func(g group) rule.Finding {
+			part := g.elements[0].ResistorPart
+			count, _ := part.Elements()
+			perElement := func(e *evidence.Evidence, name string) (quantity.Voltage, error) {
+				v, err := e.ElementPeak(name)
+				return v / quantity.Voltage(count), err
+			}
+			r := rating[quantity.Voltage]{what: "voltage of each element", rated: part.RatedVoltage.V, given: part.RatedVoltage.Set(), key: part.RatedVoltage.Key,
+				derating: limits.ResistorVoltage, conditions: evidence.Ratings(), stress: perElement}
+			return r.judge(e, g, about("resistor.voltage", rule.Equipment, g, part.RatedVoltage.Place))
+		})
+	},
+}
+
+var resistorPower = rule.Rule{
+	ID: "resistor.power", Title: "Resistor power",
+	Demands: "The power in each resistor element stays at or below 70 % of its rating at the air temperature of the site.",
+	Applies: "Every resistor that the description gives as a part.",
+	Margin:  "marginal above 50 % of the rating",
+	Concern: rule.Equipment,
+	Sources: []rule.Source{limits.ResistorPower.Source},
+	Judge: func(e *evidence.Evidence) rule.Judgement {
+		return each(groups(e, isResistor), "no resistor is described", func(g group) rule.Finding { return judgePower(e, g) })
+	},
+}
+
+func judgePower(e *evidence.Evidence, g group) rule.Finding {
+	part := g.elements[0].ResistorPart
+	f := about("resistor.power", rule.Equipment, g, part.RatedPower.Place)
+	count, strings := part.Elements()
+	share, err := ambientShare(e)
+	if err != nil {
+		f.Relation = rule.AtMost
+		return f.Lacking(err)
+	}
+	perElement := func(e *evidence.Evidence, name string) (quantity.Power, error) {
+		p, err := e.ElementPower(name)
+		return p / quantity.Power(count*strings), err
+	}
+	r := rating[quantity.Power]{what: "power of each element", rated: part.RatedPower.V * quantity.Power(share), given: part.RatedPower.Set(), key: part.RatedPower.Key,
+		derating: limits.ResistorPower, conditions: evidence.Ratings(), stress: perElement}
+	return r.judge(e, g, f)
+}
+
+// ambientShare is the part of a resistor's power rating left at the site's air
+// temperature: all of it to 70 °C, none above 155 °C (common practice, no source).
+func ambientShare(e *evidence.Evidence) (float64, error) {
+	site := e.Chain().Site
+	if site == nil || !site.AirTemperature.Set() {
+		return 0, lack.Key("site.air_temperature")
+	}
+	t := site.AirTemperature.V
+	if t >= limits.NoPowerAbove {
+		return 0, lack.Range("air at %s leaves a film resistor no power", quantity.Text(t))
+	}
+	share := float64((limits.NoPowerAbove - t) / (limits.NoPowerAbove - limits.FullPowerTo))
+	return min(1, share), nil
+}
+
+var arcVoltage = rule.Rule{
+	ID: "series.arc_voltage", Title: "Series resistors in an arc: voltage",
+	Demands: "Each series resistor between stored charge and gun stands the full voltage of the chain as a single pulse.",
+	Applies: "Filter, gun-end and bias resistors; an arc at the gun puts the full voltage across them. A clamp across the bias resistor limits it.",
+	Margin:  "marginal above 80 % of the single-pulse rating",
+	Concern: rule.Equipment,
+	Sources: []rule.Source{limits.ArcSource, limits.SinglePulse.Source},
+	Judge: func(e *evidence.Evidence) rule.Judgement {
+		return each(groups(e, isSeries), "no series resistor is described", func(g group) rule.Finding { return judgeArcVoltage(e, g) })
+	},
+}
+
+func isSeries(el circuit.Element) bool { return el.ResistorPart != nil && el.Role == circuit.Series }
+
+func judgeArcVoltage(e *evidence.Evidence, g group) rule.Finding {
+	part := g.elements[0].ResistorPart
+	rated, pulse := part.RatedPulseVoltage, true
+	if !rated.Set() {
+		rated, pulse = part.RatedVoltage, false
+	}
+	f := about("series.arc_voltage", rule.Equipment, g, rated.Place)
+	count, _ := part.Elements()
+	full := func(e *evidence.Evidence, name string) (quantity.Voltage, error) {
+		v, err := e.ArcVoltage(name)
+		return v / quantity.Voltage(count), err
+	}
+	r := rating[quantity.Voltage]{what: "arc voltage of each element", rated: rated.V, given: rated.Set(), key: part.RatedPulseVoltage.Key,
+		derating: limits.SinglePulse, conditions: evidence.Ratings(), stress: full}
+	f = r.judge(e, g, f)
+	f.Sources = append(f.Sources, limits.ArcSource)
+	if !pulse && rated.Set() {
+		f.Because += fmt.Sprintf(" (no %s given: the continuous rating judges)", part.RatedPulseVoltage.Key)
+	}
+	return f
+}
+
+var arcEnergy = rule.Rule{
+	ID: "series.arc_energy", Title: "Series resistors in an arc: energy",
+	Demands: "Each series resistor between stored charge and gun takes the energy that an arc releases.",
+	Applies: "Filter and gun-end resistors; each is judged as if it took all of it.",
+	Margin:  "marginal above 80 % of the single-pulse rating",
+	Concern: rule.Equipment,
+	Sources: []rule.Source{limits.ArcSource, limits.SinglePulse.Source},
+	Judge: func(e *evidence.Evidence) rule.Judgement {
+		return each(groups(e, isDamping), "no filter or gun-end resistor is described", func(g group) rule.Finding { return judgeArcEnergy(e, g) })
+	},
+}
+
+// isDamping keeps the resistors that the charge of filter and cable passes in an
+// arc; the bias resistor sees what its bypass holds only.
+func isDamping(el circuit.Element) bool { return isSeries(el) && el.Name != "bias.resistor" }
+
+func judgeArcEnergy(e *evidence.Evidence, g group) rule.Finding {
+	part := g.elements[0].ResistorPart
+	f := about("series.arc_energy", rule.Equipment, g, part.RatedEnergy.Place)
+	count, strings := part.Elements()
+	released := func(e *evidence.Evidence, name string) (quantity.Energy, error) {
+		w, err := e.ArcEnergy(name)
+		return w / quantity.Energy(count*strings), err
+	}
+	r := rating[quantity.Energy]{what: "arc energy of each element", rated: part.RatedEnergy.V, given: part.RatedEnergy.Set(), key: part.RatedEnergy.Key,
+		derating: limits.SinglePulse, conditions: evidence.Ratings(), stress: released}
+	f = r.judge(e, g, f)
+	f.Sources = append(f.Sources, limits.ArcSource)
+	return f
+}

@@ -1,0 +1,17 @@
+package parts
+
+import (
+	"kilovet/hv/circuit"
+	"kilovet/rules/rule"
+)
+
+// Rules lists the rules of this family.
+func Rules() []rule.Rule {
+	return []rule.Rule{
+		capacitorVoltage, capacitorDielectric, diodeReverse, diodeCurrent,
+		resistorVoltage, resistorPower, arcVoltage, arcEnergy, cableVoltage, feedVoltage, feedTest,
+	}
+}
+
+// one is a group of a single thing that is no element of the circuit.
+func one(name string) []circuit.Element { return []circuit.Element{{Name: name}} }

@@ -1,0 +1,40 @@
+package parts
+
+import (
+	"fmt"
+
+	"kilovet/hv/quantity"
+	"kilovet/rules/evidence"
+	"kilovet/rules/limits"
+	"kilovet/rules/rule"
+)
+
+// rating is a stress to be judged against a rating by a derating.
+type rating[Q quantity.Number] struct {
+	what       string // "reverse voltage"
+	rated      Q
+	given      bool
+	key        string
+	derating   limits.Derating
+	conditions []evidence.Condition
+	stress     func(*evidence.Evidence, string) (Q, error)
+}
+
+// judge fills in a finding: the largest stress over conditions and elements against
+// the failing share of the rating.
+func (r rating[Q]) judge(e *evidence.Evidence, g group, f rule.Finding) rule.Finding {
+	f.Relation = rule.AtMost
+	f.Sources = []rule.Source{r.derating.Source}
+	f.Remedy = fmt.Sprintf("fit a part with a higher rating of %s, or lower the stress", r.what)
+	if !r.given {
+		return f.Lacking(missing(r.key))
+	}
+	most, err := evidence.Largest(e, r.conditions, g.names(), r.stress)
+	if err != nil {
+		return f.Lacking(err)
+	}
+	f.Under = most.Under.Text()
+	f.Because = fmt.Sprintf("%s of %s reaches %s of the %s rated", r.what, most.Name, quantity.Text(most.Value), quantity.Text(r.rated))
+	f = f.Most(rule.Of(most.Value), rule.Of(Q(float64(r.rated)*float64(r.derating.Fails))), r.derating.Margin())
+	return f.WithoutRemedyIfMet()
+}

@@ -1,0 +1,92 @@
+package people
+
+import (
+	"fmt"
+
+	"kilovet/hv/quantity"
+	"kilovet/rules/evidence"
+	"kilovet/rules/limits"
+	"kilovet/rules/rule"
+)
+
+var rod = rule.Rule{
+	ID: "rod.there", Title: "Earthing rod",
+	Demands: "There is a resistor rod to discharge nodes by hand.",
+	Applies: "Where a node holds more charge or energy than may be touched.",
+	Concern: rule.Life,
+	Sources: []rule.Source{limits.RodSource},
+	Judge: func(e *evidence.Evidence) rule.Judgement {
+		f := rule.Finding{Rule: "rod.there", Subject: "chain", Concern: rule.Life, Relation: rule.Presence, Sources: []rule.Source{limits.RodSource}}
+		access, done := needsCare(e, f)
+		if done != nil {
+			return *done
+		}
+		f.Place = access.Here()
+		f.Because, f.Remedy = "no earthing rod is described", "provide a resistor rod rated for voltage and energy, and describe it as access.earthing_rod"
+		if access.EarthingRod != nil {
+			f.Because, f.Place = "an earthing rod is described", access.EarthingRod.Here()
+		}
+		return *only(f.There(access.EarthingRod != nil).WithoutRemedyIfMet())
+	},
+}
+
+var rodVoltage = rule.Rule{
+	ID: "rod.voltage", Title: "Rating of the earthing rod: voltage",
+	Demands: "The rod is rated for the highest voltage of any node.",
+	Applies: "Where an earthing rod is described.",
+	Margin:  "marginal above 80 % of the rating",
+	Concern: rule.Life,
+	Sources: []rule.Source{limits.RodSource, limits.InsulationVoltage.Source},
+	Judge: func(e *evidence.Evidence) rule.Judgement {
+		r, over := described(e)
+		if r == nil {
+			return over
+		}
+		f := rule.Finding{Rule: "rod.voltage", Subject: "earthing rod", Concern: rule.Life, Relation: rule.AtMost, Place: r.RatedVoltage.Place,
+			Sources: []rule.Source{limits.RodSource}, Remedy: "use a rod with a higher voltage rating"}
+		if !r.RatedVoltage.Set() {
+			return *only(f.Lacking(missing(r.RatedVoltage.Key)))
+		}
+		most, err := evidence.Largest(e, evidence.Ratings(), e.Nodes(), func(e *evidence.Evidence, n string) (quantity.Voltage, error) { return e.Between(n, "ground") })
+		if err != nil {
+			return *only(f.Lacking(err))
+		}
+		f.Under = most.Under.Text()
+		f.Because = fmt.Sprintf("%s reaches %s; through the rod it starts with %s", most.Name, quantity.Text(most.Value), peakCurrent(most.Value, r.Resistance.V))
+		return *only(f.Most(rule.Of(most.Value), rule.Of(r.RatedVoltage.V), limits.InsulationVoltage.Margin()).WithoutRemedyIfMet())
+	},
+}
+
+func peakCurrent(v quantity.Voltage, r quantity.Resistance) string {
+	if r == 0 {
+		return "no limit to the current"
+	}
+	return quantity.Text(quantity.Current(float64(v) / float64(r)))
+}
+
+var rodEnergy = rule.Rule{
+	ID: "rod.energy", Title: "Rating of the earthing rod: energy",
+	Demands: "The rod takes the stored energy of the whole chain.",
+	Applies: "Where an earthing rod is described.",
+	Margin:  "marginal above 80 % of the rating",
+	Concern: rule.Life,
+	Sources: []rule.Source{limits.RodSource, limits.SinglePulse.Source},
+	Judge: func(e *evidence.Evidence) rule.Judgement {
+		r, over := described(e)
+		if r == nil {
+			return over
+		}
+		f := rule.Finding{Rule: "rod.energy", Subject: "earthing rod", Concern: rule.Life, Relation: rule.AtMost, Place: r.RatedEnergy.Place,
+			Sources: []rule.Source{limits.RodSource}, Remedy: "use a rod with a higher energy rating"}
+		if !r.RatedEnergy.Set() {
+			return *only(f.Lacking(missing(r.RatedEnergy.Key)))
+		}
+		most, err := evidence.Largest(e, evidence.Ratings(), []string{""}, func(e *evidence.Evidence, _ string) (quantity.Energy, error) { return e.StoredEnergy() })
+		if err != nil {
+			return *only(f.Lacking(err))
+		}
+		f.Under = most.Under.Text()
+		f.Because = fmt.Sprintf("the chain stores up to %s", quantity.Text(most.Value))
+		return *only(f.Most(rule.Of(most.Value), rule.Of(r.RatedEnergy.V), limits.SinglePulse.Margin()).WithoutRemedyIfMet())
+	},
+}

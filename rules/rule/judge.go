@@ -1,0 +1,135 @@
+package rule
+
+import (
+	"kilovet/hv/lack"
+	"kilovet/hv/quantity"
+)
+
+// margins of a verdict are a hair wider than arithmetic differences between machines.
+const slack = 1e-9
+
+// Least judges provided ≥ needed, marginal where provided < needed·(1 + margin).
+func (f Finding) Least(provided, needed Amount, margin float64) Finding {
+	f.Relation = AtLeast
+	m := ratio(provided.Value, needed.Value)
+	return f.judged(provided, needed, m, margin)
+}
+
+// Most judges provided ≤ needed, marginal where provided > needed/(1 + margin).
+func (f Finding) Most(provided, needed Amount, margin float64) Finding {
+	f.Relation = AtMost
+	m := ratio(needed.Value, provided.Value)
+	return f.judged(provided, needed, m, margin)
+}
+
+// ratio is the margin; a demand of nothing is met without limit, said as a margin of a million.
+func ratio(a, b float64) float64 {
+	const boundless = 1e6
+	if b <= 0 || a/b-1 > boundless {
+		return boundless
+	}
+	return a/b - 1
+}
+
+func (f Finding) judged(provided, needed Amount, m, margin float64) Finding {
+	f.Provided, f.Needed, f.Margin = &provided, &needed, &m
+	switch {
+	case m < -slack:
+		f.Verdict = Fails
+	case m < margin-slack:
+		f.Verdict = Marginal
+	default:
+		f.Verdict = Meets
+	}
+	return f.tempered()
+}
+
+// There judges a presence.
+func (f Finding) There(there bool) Finding {
+	f.Relation = Presence
+	f.Verdict = Fails
+	if there {
+		f.Verdict = Meets
+	}
+	return f.tempered()
+}
+
+// tempered lowers a pass that rests on an assumption to marginal.
+func (f Finding) tempered() Finding {
+	if f.Verdict == Meets && len(f.Assumptions) > 0 {
+		f.Verdict = Marginal
+	}
+	return f
+}
+
+// Lacking turns the reason why there is no number into a verdict.
+func (f Finding) Lacking(err error) Finding {
+	f.Verdict, f.Because = Unassessed, err.Error()
+	if f.Relation == "" {
+		f.Relation = Presence
+	}
+	if l := lack.Of(err); l != nil {
+		f.Missing = l.Keys
+	}
+	if f.Remedy == "" {
+		f.Remedy = remedy(f.Missing)
+	}
+	return f
+}
+
+func remedy(missing []string) string {
+	if len(missing) == 0 {
+		return "measure or calculate it by other means before switching on"
+	}
+	text := "give " + missing[0]
+	for _, key := range missing[1:] {
+		text += ", " + key
+	}
+	return text
+}
+
+// Assume adds what was taken for granted; a pass becomes marginal.
+func (f Finding) Assume(what ...string) Finding {
+	f.Assumptions = append(f.Assumptions, what...)
+	return f.tempered()
+}
+
+// Worst is the worst verdict of some findings; none at all is unassessed.
+func Worst(findings []Finding) Verdict {
+	if len(findings) == 0 {
+		return Unassessed
+	}
+	worst := Meets
+	for _, f := range findings {
+		if Graver(f.Verdict, worst) {
+			worst = f.Verdict
+		}
+	}
+	return worst
+}
+
+// Graver reports whether a is a worse verdict than b.
+func Graver(a, b Verdict) bool { return rank(a) > rank(b) }
+
+func rank(v Verdict) int {
+	switch v {
+	case Fails:
+		return 3
+	case Unassessed:
+		return 2
+	case Marginal:
+		return 1
+	}
+	return 0
+}
+
+// Quantity writes a quantity for people, for use in sentences.
+func Quantity[Q quantity.Number](q Q) string { return quantity.Text(q) }
+
+// WithoutRemedyIfMet drops the remedy of a finding that needs none.
+func (f Finding) WithoutRemedyIfMet() Finding {
+	if f.Verdict == Meets {
+		f.Remedy = ""
+	}
+	return f
+}

@@ -1,0 +1,82 @@
+package rules
+
+import (
+	"kilovet/hv/chain"
+	"kilovet/rules/evidence"
+	"kilovet/rules/optics"
+	"kilovet/rules/parts"
+	"kilovet/rules/people"
+	"kilovet/rules/rule"
+	"kilovet/rules/spacing"
+	"kilovet/rules/supply"
+)
+
+// All lists every rule, in the order in which findings are given.
+func All() []rule.Rule {
+	var all []rule.Rule
+	for _, family := range [][]rule.Rule{people.Rules(), spacing.Rules(), parts.Rules(), supply.Rules(), optics.Rules()} {
+		all = append(all, family...)
+	}
+	return all
+}
+
+// Run reviews a chain: computes its figures, judges it by every rule, and gives the
+// result as plain data. It neither reads files nor asks for the time.
+func Run(c *chain.Chain, inputs []Input, program Program) *Review {
+	e := evidence.New(c)
+	r := &Review{Program: program, Inputs: inputs, Heading: heading(c), Deference: deference}
+	for _, rl := range All() {
+		j := rl.Judge(e)
+		r.Findings = append(r.Findings, j.Findings...)
+		if j.PassedOver != "" {
+			r.PassedOver = append(r.PassedOver, rule.PassedOver{Rule: rl.ID, Because: j.PassedOver})
+		}
+	}
+	r.Figures = figures(e)
+	r.Cautions = cautions(c)
+	r.Assumptions = assumptions(e, r.Findings)
+	r.Summary = summary(e)
+	r.Verdict = rule.Worst(r.Findings)
+	r.Counts = counts(r.Findings)
+	return r
+}
+
+func counts(findings []rule.Finding) map[rule.Verdict]int {
+	n := map[rule.Verdict]int{}
+	for _, v := range rule.Verdicts {
+		n[v] = 0
+	}
+	for _, f := range findings {
+		n[f.Verdict]++
+	}
+	return n
+}
+
+func heading(c *chain.Chain) Heading {
+	return Heading{
+		Title: c.Title.V, Document: c.Document.V, Revision: c.Revision.V, Owner: c.Owner.V,
+		Creator: c.Creator.V, Approver: c.Approver.V, Date: c.Date.V, DocumentType: c.DocumentType.V,
+	}
+}
+
+const deference = "This review is an aid to people who know high voltage. It replaces neither local electrical codes nor the judgement of licensed persons: where they ask for more, they govern. Standards were read in second-hand copies; the printed standard governs. What was not described was not judged."
+
+// assumptions gathers what findings and figures take for granted, each once.
+func assumptions(e *evidence.Evidence, findings []rule.Finding) []string {
+	var all []string
+	seen := map[string]bool{}
+	note := func(texts []string) {
+		for _, t := range texts {
+			if !seen[t] {
+				seen[t] = true
+				all = append(all, t)
+			}
+		}
+	}
+	for _, f := range findings {
+		note(f.Assumptions)
+	}
+	note(e.RippleAssumptions())
+	note(e.StateAssumptions())
+	return all
+}

@@ -1,0 +1,137 @@
+package spacing
+
+import (
+	"fmt"
+	"slices"
+
+	"kilovet/hv/chain"
+	"kilovet/hv/circuit"
+	"kilovet/hv/lack"
+	"kilovet/hv/quantity"
+	"kilovet/rules/evidence"
+	"kilovet/rules/rule"
+)
+
+// aboveThis a node needs a described spacing to ground.
+const aboveThis quantity.Voltage = 1000
+
+var describedSource = rule.Source{Text: "what was not described cannot be judged: every gap above 1 kV is listed before power-up", Mark: rule.Practice, Governs: true}
+
+var described = rule.Rule{
+	ID: "spacing.described", Title: "Every gap described",
+	Demands: "Every node above 1 kV to ground, every adjacent pair of stages, output to cathode, and the floating heater supply to mains has a spacing or is covered by a rated part.",
+	Applies: "Where a supply is described.",
+	Concern: rule.Life,
+	Sources: []rule.Source{describedSource},
+	Judge:   judgeDescribed,
+}
+
+func judgeDescribed(e *evidence.Evidence) rule.Judgement {
+	if !e.HasSupply() {
+		return rule.Over("no supply is described")
+	}
+	all := finding("spacing.described", rule.Life, rule.Presence, nil)
+	all.Subject, all.Sources = "chain", []rule.Source{describedSource}
+	pairs, err := wanted(e)
+	if err != nil {
+		return rule.Judgement{Findings: []rule.Finding{all.Lacking(err)}}
+	}
+	var j rule.Judgement
+	for _, p := range pairs {
+		if !covered(e, p) {
+			f := all
+			f.Subject, f.Concern = p.from+" to "+p.to, p.concern
+			j.Findings = append(j.Findings, f.Lacking(lack.Because(fmt.Sprintf("no spacing is described between %s and %s", p.from, p.to), "spacing")))
+		}
+	}
+	if len(j.Findings) == 0 {
+		all.Because = fmt.Sprintf("all %d pairs of nodes that need one have a spacing or a rated part", len(pairs))
+		j.Findings = []rule.Finding{all.There(true)}
+	}
+	return j
+}
+
+// pair is two nodes that need a spacing between them.
+type pair struct {
+	from, to string
+	concern  rule.Concern
+}
+
+// wanted lists the pairs that need a spacing, each once.
+func wanted(e *evidence.Evidence) ([]pair, error) {
+	pairs, err := toGround(e)
+	if err != nil {
+		return nil, err
+	}
+	for k := 1; k < e.Chain().Multiplier.Stages.V; k++ {
+		pairs = append(pairs, pair{stage(k), stage(k + 1), rule.Equipment})
+	}
+	if !same(e, "output", "cathode") {
+		pairs = append(pairs, pair{"output", "cathode", rule.Equipment})
+	}
+	if h := e.Chain().Heater; h != nil && (h.Feed == nil || h.Feed.Kind.V != "battery") {
+		pairs = append(pairs, pair{"cathode", "mains", rule.Life})
+	}
+	return pairs, nil
+}
+
+func stage(k int) string { return fmt.Sprintf("stage.%d", k) }
+
+// toGround lists the nodes above 1 kV; the ends of the heater count as cathode.
+func toGround(e *evidence.Evidence) ([]pair, error) {
+	var pairs []pair
+	for _, node := range e.Nodes() {
+		if node == "heater.a" || node == "heater.b" || node == "mains" {
+			continue
+		}
+		most, err := evidence.Largest(e, evidence.Ratings(), []string{node},
+			func(e *evidence.Evidence, n string) (quantity.Voltage, error) { return e.Between(n, "ground") })
+		if err != nil {
+			return nil, err
+		}
+		if most.Value > aboveThis {
+			pairs = append(pairs, pair{node, "ground", rule.Life})
+		}
+	}
+	return pairs, nil
+}
+
+// same reports whether two names are one node, or do not both exist.
+func same(e *evidence.Evidence, a, b string) bool {
+	na, ok := e.Layout().Node(a)
+	nb, ok2 := e.Layout().Node(b)
+	return !ok || !ok2 || na == nb
+}
+
+// covered reports whether a spacing or a rated insulating part lies between a pair.
+func covered(e *evidence.Evidence, p pair) bool {
+	c := e.Chain()
+	if cable := c.Cable; cable != nil && cable.RatedVoltage.Set() && matches(e, p, "supply", "ground") {
+		return true
+	}
+	if h := c.Heater; h != nil && h.Feed != nil && h.Feed.RatedVoltage.Set() && matches(e, p, "cathode", "mains") {
+		return true
+	}
+	return slices.ContainsFunc(c.Spacings, func(s chain.Spacing) bool {
+		return s.From.Set() && slices.ContainsFunc(ends(&s), func(from string) bool { return matches(e, p, from, s.To.V) })
+	})
+}
+
+// ends are the nodes on the live side of a spacing.
+func ends(s *chain.Spacing) []string { return append([]string{s.From.V}, s.Also.V...) }
+
+// matches reports whether two names are the pair, under any alias and either way round.
+func matches(e *evidence.Evidence, p pair, a, b string) bool {
+	at := func(name string) circuit.Node {
+		if name == "heater.a" || name == "heater.b" {
+			name = "cathode"
+		}
+		n, ok := e.Layout().Node(name)
+		if !ok {
+			return -1
+		}
+		return n
+	}
+	from, to := at(p.from), at(p.to)
+	return at(a) == from && at(b) == to || at(a) == to && at(b) == from
+}

@@ -1,0 +1,80 @@
+package spacing
+
+import (
+	"fmt"
+
+	"kilovet/hv/chain"
+	"kilovet/hv/document"
+	"kilovet/hv/lack"
+	"kilovet/hv/quantity"
+	"kilovet/insulation/gap"
+	"kilovet/rules/evidence"
+	"kilovet/rules/rule"
+)
+
+// distanceMargin separates meets from marginal for distances.
+const distanceMargin = 0.10
+
+var clearance = rule.Rule{
+	ID: "spacing.clearance", Title: "Clearance",
+	Demands: "The distance through air is at least what the tables ask for at the highest voltage over states and corners.",
+	Applies: "Every spacing in air or on a printed board; in other media the breakdown estimate decides.",
+	Margin:  "marginal with less than 10 % in hand",
+	Concern: rule.Life,
+	Sources: []rule.Source{
+		{Text: "IEC 60664-1:2020 Table F.8, case A unless impulse tested", Mark: rule.Read, Governs: true},
+		{Text: "IEC 60664-1:2020 Table F.2 where mains or drive reach the gap", Mark: rule.Read},
+	},
+	Judge: func(e *evidence.Evidence) rule.Judgement {
+		return each(e, func(s *chain.Spacing) (rule.Finding, string) {
+			if !inAir(s) {
+				return rule.Finding{}, "the tables of clearances are those of air"
+			}
+			return distance(e, s, "spacing.clearance", s.Clearance, func(x evidence.Spacing) gap.Result[quantity.Length] { return x.Assessment.ClearanceNeeded }), ""
+		})
+	},
+}
+
+var creepage = rule.Rule{
+	ID: "spacing.creepage", Title: "Creepage distance",
+	Demands: "The distance along the surface is at least what the tables ask for at the highest lasting voltage, and never less than the clearance needed.",
+	Applies: "Every spacing in air or on a printed board.",
+	Margin:  "marginal with less than 10 % in hand",
+	Concern: rule.Life,
+	Sources: []rule.Source{{Text: "IEC 60664-1:2020 Table F.5", Mark: rule.Read, Governs: true}},
+	Judge: func(e *evidence.Evidence) rule.Judgement {
+		return each(e, func(s *chain.Spacing) (rule.Finding, string) {
+			if !inAir(s) {
+				return rule.Finding{}, "the tables of creepage are those of surfaces in air"
+			}
+			return distance(e, s, "spacing.creepage", s.Creepage, func(x evidence.Spacing) gap.Result[quantity.Length] { return x.Assessment.CreepageNeeded }), ""
+		})
+	},
+}
+
+func inAir(s *chain.Spacing) bool {
+	return s.Medium.V == "air" || s.Medium.V == "printed board" || s.Medium.V == "gas" && s.Gas.Or("air") == "air"
+}
+
+// distance judges a given distance against the needed one.
+func distance(e *evidence.Evidence, s *chain.Spacing, id string, given document.Given[quantity.Length], needed func(evidence.Spacing) gap.Result[quantity.Length]) rule.Finding {
+	f := finding(id, concern(s), rule.AtLeast, s)
+	if given.Set() {
+		f.Place = given.Place
+	}
+	x, err := e.Spacing(s)
+	if err != nil {
+		return f.Lacking(err)
+	}
+	need := needed(x)
+	if need.Lack != nil {
+		return f.Lacking(need.Lack)
+	}
+	f.Under, f.Sources = x.Under.Text(), append(sources(need.Sources), shown(need.Answer)...)
+	f.Because = fmt.Sprintf("%s peak, %s lasting: %s", quantity.Text(x.Voltages.Peak), quantity.Text(x.Voltages.LongTerm), need.Because)
+	f.Remedy = fmt.Sprintf("widen it to %s or more, or lower the voltage", quantity.Text(need.Value))
+	if !given.Set() {
+		return f.Lacking(lack.Key(given.Key))
+	}
+	return f.Least(rule.Of(given.V), rule.Of(need.Value), distanceMargin).Assume(need.Assumptions...).WithoutRemedyIfMet()
+}

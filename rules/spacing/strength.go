@@ -1,0 +1,103 @@
+package spacing
+
+import (
+	"fmt"
+
+	"kilovet/hv/chain"
+	"kilovet/hv/quantity"
+	"kilovet/rules/evidence"
+	"kilovet/rules/rule"
+)
+
+// Shares of the breakdown estimate that a gap may be used to: common practice.
+const (
+	breakdownFails    = 0.80
+	breakdownMarginal = 0.50
+)
+
+var breakdownSource = rule.Source{Text: "highest voltage at most 80 % of the breakdown estimate, 50 % for comfort", Mark: rule.Practice}
+
+var breakdown = rule.Rule{
+	ID: "spacing.breakdown", Title: "Breakdown of the gap",
+	Demands: "The highest voltage stays at or below 80 % of the voltage at which the gap is expected to break down.",
+	Applies: "Every spacing.",
+	Margin:  "marginal above 50 % of the estimate",
+	Concern: rule.Life,
+	Sources: []rule.Source{breakdownSource},
+	Judge: func(e *evidence.Evidence) rule.Judgement {
+		return each(e, func(s *chain.Spacing) (rule.Finding, string) { return judgeBreakdown(e, s), "" })
+	},
+}
+
+func judgeBreakdown(e *evidence.Evidence, s *chain.Spacing) rule.Finding {
+	f := finding("spacing.breakdown", concern(s), rule.AtMost, s)
+	if s.Clearance.Set() {
+		f.Place = s.Clearance.Place
+	}
+	x, err := e.Spacing(s)
+	if err != nil {
+		return f.Lacking(err)
+	}
+	stands := x.Assessment.Breakdown
+	if stands.Lack != nil {
+		return f.Lacking(stands.Lack)
+	}
+	f.Under = x.Under.Text()
+	f.Sources = append(append(sources(stands.Sources), breakdownSource), shown(stands.Answer)...)
+	f.Because = fmt.Sprintf("%s across a gap expected to break down at %s (%s)", quantity.Text(x.Voltages.Peak), quantity.Text(stands.Value), stands.Because)
+	f.Remedy = "widen the gap, round its electrodes, or lower the voltage"
+	limit := stands.Value * breakdownFails
+	return f.Most(rule.Of(x.Voltages.Peak), rule.Of(limit), breakdownFails/breakdownMarginal-1).Assume(stands.Assumptions...).WithoutRemedyIfMet()
+}
+
+// quietBelow is the peak at or below which a gap without shape is free of corona if
+// its clearance meets the table for sharp electrodes.
+const quietBelow quantity.Voltage = 2000
+
+var coronaSource = rule.Source{Text: "highest voltage at most the onset estimate; corona makes ozone, noise and X-ray-like interference, it does not break a gap", Mark: rule.Practice}
+
+var corona = rule.Rule{
+	ID: "spacing.corona", Title: "Corona",
+	Demands: "The highest voltage stays at or below the voltage at which discharge is expected to begin.",
+	Applies: "Spacings in air or gas above 2 kV peak, or narrower than the table for sharp electrodes asks.",
+	Margin:  "marginal with less than 10 % in hand or with corona; it never fails",
+	Concern: rule.Performance,
+	Sources: []rule.Source{coronaSource},
+	Judge: func(e *evidence.Evidence) rule.Judgement {
+		return each(e, func(s *chain.Spacing) (rule.Finding, string) { return judgeCorona(e, s) })
+	},
+}
+
+func judgeCorona(e *evidence.Evidence, s *chain.Spacing) (rule.Finding, string) {
+	f := finding("spacing.corona", rule.Performance, rule.AtMost, s)
+	if s.Medium.V != "air" && s.Medium.V != "gas" {
+		return f, "corona is judged in air and gas"
+	}
+	x, err := e.Spacing(s)
+	if err != nil {
+		return f.Lacking(err), ""
+	}
+	if s.Shape == nil && quiet(s, x) {
+		return f, "at or below 2 kV peak with the clearance of sharp electrodes there is no corona"
+	}
+	onset := x.Assessment.Onset
+	if onset.Lack != nil {
+		return f.Lacking(onset.Lack), ""
+	}
+	f.Under = x.Under.Text()
+	f.Sources = append(append(sources(onset.Sources), coronaSource), shown(onset.Answer)...)
+	f.Because = fmt.Sprintf("%s across a gap where discharge is expected from %s (%s)", quantity.Text(x.Voltages.Peak), quantity.Text(onset.Value), onset.Because)
+	f.Remedy = "round the sharper electrode"
+	f = f.Most(rule.Of(x.Voltages.Peak), rule.Of(onset.Value), distanceMargin).Assume(onset.Assumptions...)
+	if f.Verdict == rule.Fails {
+		f.Verdict = rule.Marginal
+	}
+	return f.WithoutRemedyIfMet(), ""
+}
+
+// quiet reports whether a gap without shape is at or below 2 kV peak and as wide as
+// the table for sharp electrodes asks.
+func quiet(s *chain.Spacing, x evidence.Spacing) bool {
+	need := x.Assessment.ClearanceNeeded
+	return quantity.AtMost(x.Voltages.Peak, quietBelow) && need.Lack == nil && quantity.AtLeast(s.Clearance.V, need.Value)
+}

@@ -63,7 +63,10 @@ func (c Cascade) Loaded(load quantity.Current) (State, error) {
 		return State{}, err
 	}
 	s := c.climb(load)
-	return s, c.within(load, s)
+	if err := c.within(load, s); err != nil {
+		return State{}, err
+	}
+	return s, nil
 }
 
 func (c Cascade) solvable(load quantity.Current) error {

@@ -12,7 +12,7 @@ import (
 func TestNodesAreSumsOfCapacitors(t *testing.T) {
 	rapid.Check(t, func(t *rapid.T) {
 		c := anyCascade(t)
-		s := c.climb(1e-6)
+		s := c.climb(anyLoad(t, c))
 		var smoothing, coupling quantity.Voltage
 		for k := range s.Smoothing {
 			smoothing += s.Smoothing[k].Mean
@@ -57,7 +57,7 @@ func TestColumnIsTheSumOfCouplingSwings(t *testing.T) {
 func TestStressFallsUpwards(t *testing.T) {
 	rapid.Check(t, func(t *rapid.T) {
 		c := anyCascade(t)
-		s := c.climb(1e-6)
+		s := c.climb(anyLoad(t, c))
 		for k := range s.Smoothing {
 			if s.Smoothing[k].Maximum > 2*c.Peak || s.DiodeReverse[2*k] > 2*c.Peak || s.DiodeReverse[2*k+1] > s.DiodeReverse[2*k]*(1+1e-12) {
 				t.Errorf("stage %d: %+v, reverse %v", k+1, s.Smoothing[k], s.DiodeReverse[2*k:2*k+2])

@@ -118,6 +118,20 @@ func TestStrayToGroundAloneTakesNothing(t *testing.T) {
 	near(t, "mean", float64(s.Mean), 10e3, 1e-12)
 }
 
+// With one stage the capacitance to ground lies across the smoothing capacitor.
+func TestStrayToGroundOfOneStage(t *testing.T) {
+	c := Cascade{Peak: 1000, Frequency: 3e4, Junction: 5e-11, ToGround: 3e-10}.WithEqual(1, 1e-9)
+	larger := Cascade{Peak: 1000, Frequency: 3e4, Junction: 5e-11}.WithEqual(1, 1e-9)
+	larger.Smoothing[0] += 3e-10
+	got, err := c.NoLoadWithStrays()
+	if err != nil {
+		t.Fatal(err)
+	}
+	want, _ := larger.NoLoadWithStrays()
+	near(t, "mean", float64(got.Mean), float64(want.Mean), 1e-12)
+	near(t, "maximum", float64(got.Maximum), float64(want.Maximum), 1e-12)
+}
+
 // A symmetrical one-stage cascade: the coupling capacitor and both junctions divide
 // the drive, and each of the two diodes in series gives what is left.
 func TestSymmetricalStrays(t *testing.T) {

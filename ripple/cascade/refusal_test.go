@@ -36,7 +36,12 @@ func TestRefusesWhatIsNoCascade(t *testing.T) {
 	} {
 		c := good.WithEqual(3, 1e-9)
 		spoil(&c)
-		t.Run(name, func(t *testing.T) { refused(t, c, 1e-5) })
+		t.Run(name, func(t *testing.T) {
+			refused(t, c, 1e-5)
+			if v, err := c.NoLoad(); lack.Of(err) == nil {
+				t.Errorf("without load %g", v)
+			}
+		})
 	}
 	refused(t, good, -1e-6)
 	refused(t, good, quantity.Current(math.NaN()))

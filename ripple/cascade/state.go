@@ -88,7 +88,10 @@ func (c Cascade) within(load quantity.Current, s State) error {
 		return lack.Range("one period's load moves capacitors by %s, more than %s at the %s peak of the drive: the charging pulses are too long for charge balance",
 			quantity.Text(c.swing(load)), quantity.Text(limit), quantity.Text(c.Peak))
 	}
-	if !quantity.AtMost(s.Drop(), LargestDrop*s.NoLoad) || s.lowest() <= 0 {
+	if s.lowest() <= 0 && quantity.AtMost(s.Drop(), LargestDrop*s.NoLoad) {
+		return lack.Range("the load would empty a capacitor of the cascade: there charge balance fails")
+	}
+	if !quantity.AtMost(s.Drop(), LargestDrop*s.NoLoad) {
 		return lack.Range("the load would take %s of the %s the cascade gives without load: beyond %g of it charge balance fails",
 			quantity.Text(s.Drop()), quantity.Text(s.NoLoad), LargestDrop)
 	}

@@ -213,7 +213,7 @@ func (b *binder) wrongType(n *node, d Declared) {
 func (d Declared) wanted() string {
 	switch d.Holds {
 	case AQuantity:
-		return "a " + d.Dimension.Name
+		return d.Dimension.Noun()
 	case AText:
 		return "text"
 	case AWhole:

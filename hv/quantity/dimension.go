@@ -29,6 +29,14 @@ type unit struct {
 	offset   float64
 }
 
+// Noun is the name with its article: "an energy".
+func (d *Dimension) Noun() string {
+	if strings.ContainsAny(d.Name[:1], "aeio") {
+		return "an " + d.Name
+	}
+	return "a " + d.Name
+}
+
 // Units lists the accepted spellings, the most usual first.
 func (d *Dimension) Units() []string {
 	symbols := make([]string, len(d.units))

@@ -11,11 +11,16 @@ func Text[Q Number](q Q) string { return q.Dimension().Text(float64(q)) }
 
 // Text writes an SI value of the dimension for people: four significant digits
 // and, where it is usual, an SI prefix; temperatures in degrees Celsius below
-// 1000 K, fractions in per cent or ppm.
+// 1000 K, times from 1000 s in minutes and from ten hours in hours, fractions in per
+// cent or ppm.
 func (d *Dimension) Text(v float64) string {
 	switch {
 	case d == temperature && v < 1000:
 		return Significant(v-273.15) + " °C"
+	case d == duration && math.Abs(v) >= 36000:
+		return Significant(v/3600) + " h"
+	case d == duration && math.Abs(v) >= 1000:
+		return Significant(v/60) + " min"
 	case d == fraction:
 		return fractionText(v)
 	case d == area:

@@ -29,18 +29,15 @@ func (d *Dimension) Parse(text string) (float64, error) {
 		return 0, d.notANumber(s)
 	}
 	symbol := strings.TrimSpace(s[len(m[0]):])
-	if refusal := d.beforeUnit(m[1], symbol); refusal != nil {
-		return 0, refusal
-	}
 	u, ok := d.find(symbol)
 	if !ok {
-		return 0, d.unknownUnit(symbol)
+		return 0, d.noUnit(m[1], symbol)
 	}
 	return u.value(m[1], m[2], d)
 }
 
-// beforeUnit refuses what follows a number where a unit should; nil where it may be one.
-func (d *Dimension) beforeUnit(mantissa, symbol string) error {
+// noUnit refuses what follows a number where a unit should.
+func (d *Dimension) noUnit(mantissa, symbol string) error {
 	switch {
 	case symbol == "" && strings.Trim(mantissa, "+-0.") == "":
 		return &Refusal{"a bare zero", fmt.Sprintf("write it with its unit, as in \"0 %s\"", d.units[0].symbol)}
@@ -51,7 +48,7 @@ func (d *Dimension) beforeUnit(mantissa, symbol string) error {
 	case strings.ContainsAny(symbol[:1], "0123456789_'."):
 		return &Refusal{"a number in groups or with two points", "write the digits without gaps and one decimal point, as in " + strconv.Quote(d.Example)}
 	}
-	return nil
+	return d.unknownUnit(symbol)
 }
 
 // value joins mantissa and exponent before the one conversion, so that "10 uF"
@@ -90,17 +87,17 @@ func (d *Dimension) unknownUnit(symbol string) error {
 	}
 	for _, other := range dimensions {
 		if _, ok := other.find(symbol); ok {
-			return &Refusal{fmt.Sprintf("unit %q is a %s, not a %s", symbol, other.Name, d.Name), d.accepted()}
+			return &Refusal{fmt.Sprintf("unit %q is %s, not %s", symbol, other.Noun(), d.Noun()), d.accepted()}
 		}
 	}
 	return &Refusal{fmt.Sprintf("unknown unit %q", cut(symbol)), d.accepted()}
 }
 
 func (d *Dimension) accepted() string {
-	return fmt.Sprintf("write a %s such as %q (units: %s)", d.Name, d.Example, strings.Join(d.Units(), ", "))
+	return fmt.Sprintf("write %s such as %q (units: %s)", d.Noun(), d.Example, strings.Join(d.Units(), ", "))
 }
 
-var signs = strings.NewReplacer("\u00b5", "u", "\u03bc", "u", "\u2126", "ohm", "\u03a9", "ohm", "\u2212", "-", "²", "2", "³", "3", "\u00a0", " ", "\u202f", " ")
+var signs = strings.NewReplacer("\u00b5", "u", "\u03bc", "u", "\u2126", "ohm", "\u03a9", "ohm", "\u2212", "-", "²", "2", "³", "3", "\u00a0", " ", "\u202f", " ", "\u2009", " ")
 
 func plainSigns(s string) string { return signs.Replace(s) }
 

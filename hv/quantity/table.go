@@ -26,7 +26,7 @@ var (
 		exactly("mbar", 2), exactly("Pa", 0), exactly("hPa", 2), exactly("kPa", 3), exactly("MPa", 6), exactly("mPa", -3),
 		exactly("uPa", -6), exactly("bar", 5), scaled("Torr", 101325.0/760), scaled("mTorr", 101.325/760), scaled("atm", 101325)}}
 	field = &Dimension{Name: "field strength", SI: "V/m", Example: "3 kV/mm", prefixed: true, units: []unit{
-		exactly("kV/mm", 6), exactly("kV/cm", 5), exactly("V/mm", 3), exactly("V/m", 0), exactly("kV/m", 3), exactly("MV/m", 6), exactly("V/um", 6)}}
+		exactly("kV/mm", 6), exactly("kV/cm", 5), exactly("V/mm", 3), exactly("V/m", 0), exactly("kV/m", 3), exactly("MV/m", 6), exactly("GV/m", 9), exactly("V/um", 6)}}
 	angle = &Dimension{Name: "angle", SI: "rad", Example: "5 mrad", prefixed: true,
 		units: append(decades("rad", "m - u"), scaled("deg", 0.017453292519943295))}
 	fraction = &Dimension{Name: "fraction", SI: "1", Example: "10 %", units: []unit{exactly("%", -2), exactly("ppm", -6), exactly("1", 0)}}
@@ -35,7 +35,7 @@ var (
 	perKelvin         = &Dimension{Name: "change per kelvin", SI: "1/K", Example: "50 ppm/K", units: []unit{exactly("ppm/K", -6), exactly("%/K", -2), exactly("1/K", 0)}}
 	perVolt           = &Dimension{Name: "change per volt", SI: "1/V", Example: "-1 ppm/V", units: []unit{exactly("ppm/V", -6), exactly("%/V", -2), exactly("1/V", 0), exactly("%/kV", -5)}}
 	humidity          = &Dimension{Name: "absolute humidity", SI: "kg/m3", Example: "11 g/m3", units: []unit{exactly("g/m3", -3), exactly("kg/m3", 0)}}
-	resistivity       = &Dimension{Name: "resistivity", SI: "ohm m", Example: "1e12 ohm m", prefixed: true, units: append(decades("ohm m", "- k M G T"), exactly("ohm cm", -2))}
+	resistivity       = &Dimension{Name: "resistivity", SI: "ohm m", Example: "1e12 ohm m", prefixed: true, units: append(decades("ohm m", "- k M G T m u"), exactly("ohm cm", -2))}
 	currentDensity    = &Dimension{Name: "current density", SI: "A/m2", Example: "1.6 A/cm2", units: []unit{exactly("A/cm2", 4), exactly("A/m2", 0), exactly("mA/cm2", 1)}}
 	richardson        = &Dimension{Name: "Richardson constant", SI: "A/m2K2", Example: "60 A/cm2K2", units: []unit{exactly("A/cm2K2", 4), exactly("A/m2K2", 0)}}
 	kermaRate         = &Dimension{Name: "air kerma rate", SI: "Gy/s", Example: "1 uGy/h", units: []unit{

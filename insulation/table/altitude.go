@@ -22,7 +22,7 @@ var altitudeRows = [][]float64{
 	{20000, 14.5},
 }
 
-var altitude = pick(printed("A.2"), "altitude", altitudeRows, 1, metre, quantity.Fraction(1))
+var altitude = Of(printed("A.2"), "altitude", altitudeRows, 1, metre, quantity.Fraction(1))
 
 // AltitudeFactor multiplies the clearances of the tables, which hold up to 2000 m;
 // below it is 1, past 20000 m there is a lack.

@@ -34,7 +34,7 @@ var boardNames = [...]string{"B1", "B2", "B3", "B4", "A5", "A6", "A7"}
 var boards = func() (c [len(boardNames)]*Column[quantity.Voltage, quantity.Length]) {
 	for i, name := range boardNames {
 		source := gap.Source{Text: "IPC-2221 Table 6-1, column " + name, Mark: gap.Read}
-		c[i] = pick(source, "peak voltage", boardRows, i+1, volt, millimetre)
+		c[i] = Of(source, "peak voltage", boardRows, i+1, volt, millimetre)
 		for range boardRows {
 			c[i].marks = append(c[i].marks, gap.Read)
 		}

@@ -128,7 +128,7 @@ var impulse = [2][3]*Column[quantity.Voltage, quantity.Length]{
 
 func impulseColumn(c Case, degree int) *Column[quantity.Voltage, quantity.Length] {
 	source := printed(fmt.Sprintf("F.2, %s, pollution degree %d", c, degree))
-	return pick(source, "impulse voltage", impulseRows, 3*int(c)+degree, kilovolt, millimetre)
+	return Of(source, "impulse voltage", impulseRows, 3*int(c)+degree, kilovolt, millimetre)
 }
 
 // ImpulseClearance is the column of Table F.2 for a case and a pollution degree of
@@ -141,8 +141,8 @@ func ImpulseClearance(c Case, degree int) (*Column[quantity.Voltage, quantity.Le
 }
 
 var steady = [2]*Column[quantity.Voltage, quantity.Length]{
-	pick(printed("F.8, case A"), "peak voltage", steadyRows, 1, kilovolt, millimetre),
-	pick(printed("F.8, case B"), "peak voltage", steadyRows, 2, kilovolt, millimetre),
+	Of(printed("F.8, case A"), "peak voltage", steadyRows, 1, kilovolt, millimetre),
+	Of(printed("F.8, case B"), "peak voltage", steadyRows, 2, kilovolt, millimetre),
 }
 
 // SteadyClearance is the column of Table F.8 for steady, temporary and recurring
@@ -150,7 +150,7 @@ var steady = [2]*Column[quantity.Voltage, quantity.Length]{
 // allowed (memory).
 func SteadyClearance(c Case) *Column[quantity.Voltage, quantity.Length] { return steady[c] }
 
-var dischargeFree = pick(printed("F.9, case A"), "peak voltage", dischargeFreeRows, 1, kilovolt, millimetre)
+var dischargeFree = Of(printed("F.9, case A"), "peak voltage", dischargeFreeRows, 1, kilovolt, millimetre)
 
 // DischargeFreeClearance is the case A clearance at which partial discharge is
 // avoided (Table F.9): up to 2 kV peak that of Table F.8, nothing past 12 kV. It

@@ -74,6 +74,9 @@ func (c *Column[A, V]) Reach(v V) (A, error) {
 	return c.at[i-1] + part*(c.at[i]-c.at[i-1]), nil
 }
 
+// First is the argument of the first row.
+func (c *Column[A, V]) First() A { return c.at[0] }
+
 // Last is the argument of the last row.
 func (c *Column[A, V]) Last() A { return c.at[len(c.at)-1] }
 
@@ -113,10 +116,10 @@ func weaker(a, b gap.Mark) gap.Mark {
 	return gap.Read
 }
 
-// pick builds a column from rows of printed numbers: the first of each row is the
-// argument, the k-th the value, both times the size of their unit. A zero value is
-// a blank cell and is left out.
-func pick[A, V quantity.Number, R ~[]float64](source gap.Source, what string, rows []R, k int, perArgument A, perValue V) *Column[A, V] {
+// Of builds a column from rows of printed numbers: the first of each row is the
+// argument, the k-th the value, both times the size of their unit; both must rise. A
+// zero value is a blank cell and is left out.
+func Of[A, V quantity.Number, R ~[]float64](source gap.Source, what string, rows []R, k int, perArgument A, perValue V) *Column[A, V] {
 	c := &Column[A, V]{source: source, what: what}
 	for _, row := range rows {
 		if row[k] == 0 {

@@ -100,7 +100,7 @@ var (
 )
 
 func creepageOf(rows [][]float64, k int, name string) *creepageColumn {
-	return pick(printed(name), "long-term voltage", rows, k, volt, millimetre)
+	return Of(printed(name), "long-term voltage", rows, k, volt, millimetre)
 }
 
 func creepageTriple(rows [][]float64, first int, name string) [3]*creepageColumn {

@@ -137,7 +137,7 @@ func secondaryTable(name string, rows [][]float64) (c [4]*Column[quantity.Voltag
 	}
 	for i, band := range mainsBands {
 		source := laboratory(fmt.Sprintf("Table %s, mains to %s", name, quantity.Text(band)))
-		c[i] = pick(source, "peak voltage", byPeak, 1+2*i, volt, millimetre)
+		c[i] = Of(source, "peak voltage", byPeak, 1+2*i, volt, millimetre)
 	}
 	return c
 }
@@ -162,7 +162,7 @@ func SecondaryClearance(peak, lineToNeutral quantity.Voltage, category int) (Rea
 	return none, lack.Range("IEC 61010-1 Tables K.11, K.12 end at a mains of 1000 V, asked for %s", quantity.Text(lineToNeutral))
 }
 
-var testPairs = pick(laboratory("Tables K.11, K.12, pairs of clearance and test"), "clearance", pairRows, 1, millimetre, volt)
+var testPairs = Of(laboratory("Tables K.11, K.12, pairs of clearance and test"), "clearance", pairRows, 1, millimetre, volt)
 
 // TestVoltage is the AC r.m.s. voltage, 50 or 60 Hz for at least 5 s, with which a
 // clearance is tested, without altitude correction; between rows that of the larger.

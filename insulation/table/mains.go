@@ -27,7 +27,7 @@ var mains = [4]*Column[quantity.Voltage, quantity.Voltage]{
 
 func mainsColumn(category int) *Column[quantity.Voltage, quantity.Voltage] {
 	source := printed(fmt.Sprintf("F.1, overvoltage category %d", category))
-	return pick(source, "line-to-neutral voltage", mainsRows, category, volt, volt)
+	return Of(source, "line-to-neutral voltage", mainsRows, category, volt, volt)
 }
 
 // RatedImpulse is the impulse voltage that equipment fed from a mains of the given

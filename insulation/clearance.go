@@ -1,0 +1,230 @@
+package insulation
+
+import (
+	"fmt"
+	"slices"
+
+	"kilovet/hv/lack"
+	"kilovet/hv/quantity"
+	"kilovet/insulation/gap"
+	"kilovet/insulation/table"
+)
+
+// Scope of IEC 60664-1 (read in a catalogue entry): 1000 V AC, 1500 V DC. Its tables go
+// on and are used to their last row.
+const scope quantity.Voltage = 1500
+
+// ClearanceNeeded is the clearance that the printed tables ask for in air: the largest
+// of IEC 60664-1 Table F.8 for the peak, F.2 for the rated impulse where a mains reaches
+// the gap, IEC 61010-1 K.11 or K.12 in a secondary circuit behind a mains of category 3
+// or 4, IPC-2221 on a printed board, times the altitude factor, and not under the floor of
+// the pollution degree. Reinforced insulation is dimensioned for 160 % of the peak and
+// the next impulse step; functional insulation as basic.
+//
+// Case A holds unless the gap was impulse tested. Past the last row of a table, without
+// pollution degree or altitude, and in other gases there is a lack.
+func ClearanceNeeded(g gap.Gap, v gap.Voltages) (gap.Answer[quantity.Length], error) {
+	var none gap.Answer[quantity.Length]
+	if err := inAir(g); err != nil {
+		return none, err
+	}
+	factor, err := altitudeFactor(g)
+	if err != nil {
+		return none, err
+	}
+	field := fieldCase(g)
+	asked, err := electrical(g, v, field.Case)
+	if err != nil {
+		return none, err
+	}
+	for i := range asked {
+		asked[i].raise(factor)
+	}
+	floor, err := table.PollutionFloor(degreeOn(g), g.Medium == gap.PrintedBoard)
+	if err != nil {
+		return none, err
+	}
+	a := largest(append(asked, demand{Reading: floor, why: pollution}))
+	a.Assumptions = append(a.Assumptions, field.assumptions...)
+	a.Because += field.remark
+	return a, nil
+}
+
+// pollution is why there is a floor; it is not shown where it does not govern.
+const pollution = "pollution"
+
+// demand is what one table asks for.
+type demand struct {
+	table.Reading[quantity.Length]
+	why   string
+	extra []gap.Source // of factors
+}
+
+// raise multiplies a demand by the altitude factor.
+func (d *demand) raise(factor table.Reading[quantity.Fraction]) {
+	if factor.Value > 1 {
+		d.Value *= quantity.Length(factor.Value)
+		d.why += fmt.Sprintf(", times %.3g for the altitude", float64(factor.Value))
+		d.extra = append(d.extra, factor.Source)
+	}
+}
+
+// largest makes the largest demand the answer and shows the others.
+func largest(asked []demand) gap.Answer[quantity.Length] {
+	slices.SortStableFunc(asked, func(a, b demand) int {
+		switch {
+		case a.Value > b.Value:
+			return -1
+		case a.Value < b.Value:
+			return 1
+		}
+		return 0
+	})
+	first := asked[0]
+	a := gap.Answer[quantity.Length]{
+		Value:   first.Value,
+		Because: fmt.Sprintf("%s: %s, %s", first.why, first.Source.Text, first.Rows),
+		Sources: append([]gap.Source{first.Source.Governing()}, first.extra...),
+	}
+	if first.Note != "" {
+		a.Because += "; " + first.Note
+	}
+	for _, d := range asked[1:] {
+		if d.why != pollution {
+			a.Shown = append(a.Shown, gap.Beside[quantity.Length]{Value: d.Value, Source: d.Source})
+		}
+	}
+	return a
+}
+
+// electrical lists what the tables ask for at the voltages, before the altitude.
+func electrical(g gap.Gap, v gap.Voltages, field table.Case) ([]demand, error) {
+	steady, err := steadyDemand(g, v.Peak, field)
+	if err != nil {
+		return nil, err
+	}
+	asked := []demand{steady}
+	impulse, err := impulseDemand(g, v, field)
+	if err != nil {
+		return nil, err
+	}
+	asked = append(asked, impulse...)
+	board, err := boardDemand(g, v.Peak)
+	if err != nil {
+		return nil, err
+	}
+	asked = append(asked, board...)
+	return append(asked, secondaryDemand(g, v.Peak)...), nil
+}
+
+// safetyStep is what the peak is multiplied by before Table F.8 is read: 160 % for
+// reinforced insulation (IEC 60664-1, memory).
+func safetyStep(g gap.Gap) quantity.Voltage {
+	if g.Class() == gap.Reinforced {
+		return 1.6
+	}
+	return 1
+}
+
+func steadyDemand(g gap.Gap, peak quantity.Voltage, field table.Case) (demand, error) {
+	step := safetyStep(g)
+	r, err := table.SteadyClearance(field).At(peak * step)
+	d := demand{Reading: r, why: quantity.Text(peak) + " peak"}
+	if step > 1 {
+		d.why = "reinforced, 160 % of " + d.why
+	}
+	if peak > scope {
+		d.Note = "beyond the standard's scope of 1.5 kV DC, whose table is used to its last row"
+	}
+	return d, err
+}
+
+// impulseDemand is none where no mains reaches the gap.
+func impulseDemand(g gap.Gap, v gap.Voltages, field table.Case) ([]demand, error) {
+	u, sources, err := ratedImpulse(g, v)
+	if err != nil || u == 0 {
+		return nil, err
+	}
+	why := "impulse of " + quantity.Text(u)
+	if g.Class() == gap.Reinforced {
+		u = table.ReinforcedImpulse(u)
+		why = "reinforced, next step " + quantity.Text(u)
+	}
+	column, err := table.ImpulseClearance(field, degreeOn(g))
+	if err != nil {
+		return nil, err
+	}
+	r, err := column.At(u)
+	return []demand{{Reading: r, why: why, extra: sources}}, err
+}
+
+func ratedImpulse(g gap.Gap, v gap.Voltages) (quantity.Voltage, []gap.Source, error) {
+	if v.RatedImpulse > 0 || g.Mains == nil {
+		return v.RatedImpulse, nil, nil
+	}
+	r, err := table.RatedImpulse(g.Mains.LineToNeutral, g.Mains.Category)
+	return r.Value, []gap.Source{r.Source}, err
+}
+
+// boardDemand is the conductor spacing of IPC-2221.
+func boardDemand(g gap.Gap, peak quantity.Voltage) ([]demand, error) {
+	if g.Medium != gap.PrintedBoard {
+		return nil, nil
+	}
+	var altitude quantity.Length
+	if g.Altitude != nil {
+		altitude = *g.Altitude
+	}
+	r, err := table.BoardSpacing(peak, g.Board, altitude)
+	return []demand{{Reading: r, why: quantity.Text(peak) + " between conductors of a board"}}, err
+}
+
+// secondaryDemand is that of IEC 61010-1 where its tables were read; where not, the
+// others stand alone.
+func secondaryDemand(g gap.Gap, peak quantity.Voltage) []demand {
+	if g.Mains == nil || !g.Mains.Secondary {
+		return nil
+	}
+	r, err := table.SecondaryClearance(peak, g.Mains.LineToNeutral, g.Mains.Category)
+	if err != nil {
+		return nil
+	}
+	d := demand{Reading: r, why: quantity.Text(peak) + " behind the mains"}
+	if g.Class() == gap.Reinforced {
+		d.Value, d.why = 2*d.Value, "reinforced, twice "+d.why // IEC 61010-1 K.3
+	}
+	return []demand{d}
+}
+
+// altitudeFactor is that of the pressure where it is given, else of the altitude.
+func altitudeFactor(g gap.Gap) (table.Reading[quantity.Fraction], error) {
+	switch {
+	case g.TruePressure() > 0:
+		return table.PressureFactor(g.TruePressure())
+	case g.Altitude == nil:
+		return table.Reading[quantity.Fraction]{}, lack.Key("site.altitude")
+	}
+	return table.AltitudeFactor(*g.Altitude)
+}
+
+// judged is the case of the field with what it rests on.
+type judged struct {
+	table.Case
+	remark      string
+	assumptions []string
+}
+
+// fieldCase is case A, which asks for no test, unless the gap was impulse tested: then
+// case B, where the shape is nearly homogeneous (plates, or no radius under the gap) or
+// not described, the test being taken as its proof.
+func fieldCase(g gap.Gap) judged {
+	switch {
+	case !g.ImpulseTested:
+		return judged{Case: table.CaseA}
+	case g.Shape == nil:
+		return judged{table.CaseB, "; impulse tested", []string{"the impulse voltage test is taken as proof that the field is nearly homogeneous: no shape is given"}}
+	case g.Shape.Kind == gap.Plates || (g.Clearance > 0 && quantity.AtLeast(g.Shape.Sharpest(), g.Clearance)):
+		return judged{Case: table.CaseB, remark: "; homogeneous by its shape and impulse tested"}
+	}
+	return judged{Case: table.CaseA, remark: "; the shape is not homogeneous, case A in spite of the test"}
+}

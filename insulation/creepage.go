@@ -1,0 +1,98 @@
+package insulation
+
+import (
+	"fmt"
+
+	"kilovet/hv/quantity"
+	"kilovet/insulation/gap"
+	"kilovet/insulation/table"
+)
+
+// CreepageNeeded is the creepage distance that IEC 60664-1 Table F.5 asks for at the
+// long-term voltage, twice it for reinforced insulation, never under the clearance
+// needed. Glass, ceramics and other materials that do not track need the clearance
+// only (memory). Without material or index, past 63 kV, and in media without a surface
+// in air there is a lack.
+func CreepageNeeded(g gap.Gap, v gap.Voltages) (gap.Answer[quantity.Length], error) {
+	var none gap.Answer[quantity.Length]
+	if err := inAir(g); err != nil {
+		return none, err
+	}
+	group, source, err := groupOf(g)
+	if err != nil {
+		return none, err
+	}
+	clearance, noClearance := ClearanceNeeded(g, v)
+	if group == table.NonTracking {
+		clearance.Because = "no tracking: the clearance is enough, " + clearance.Because
+		clearance.Sources = append(clearance.Sources, source)
+		return clearance, noClearance
+	}
+	a, err := tracked(g, v.LongTerm, group)
+	if err != nil {
+		return none, err
+	}
+	a.Sources = append(a.Sources, source)
+	switch {
+	case noClearance != nil:
+		a.Assumptions = append(a.Assumptions, "the creepage is not under the clearance, which is not known: "+noClearance.Error())
+	case clearance.Value > a.Value:
+		return raised(a, clearance), nil
+	}
+	return a, nil
+}
+
+// tracked is the creepage of Table F.5 with the step of the insulation class.
+func tracked(g gap.Gap, longTerm quantity.Voltage, group table.Group) (gap.Answer[quantity.Length], error) {
+	r, err := table.Creepage(longTerm, table.Surface{
+		Degree: degreeOn(g), Group: group, PrintedWiring: g.Medium == gap.PrintedBoard, Ribbed: g.Ribbed,
+	})
+	if err != nil {
+		return gap.Answer[quantity.Length]{}, err
+	}
+	a := gap.Answer[quantity.Length]{
+		Value:   r.Value,
+		Because: fmt.Sprintf("%s long-term on %s: %s, %s", quantity.Text(longTerm), group, r.Source.Text, r.Rows),
+		Sources: []gap.Source{r.Source.Governing()},
+	}
+	if g.Class() == gap.Reinforced {
+		a.Value, a.Because = 2*a.Value, "reinforced, twice "+a.Because // IEC 60664-1, read in TI SLUAAR5
+	}
+	if r.Note != "" {
+		a.Because += "; " + r.Note
+	}
+	if longTerm > scope {
+		a.Because += "; beyond the standard's scope of 1.5 kV DC"
+	}
+	return a, nil
+}
+
+// raised is the creepage brought up to the clearance needed.
+func raised(creepage, clearance gap.Answer[quantity.Length]) gap.Answer[quantity.Length] {
+	shown := gap.Beside[quantity.Length]{Value: creepage.Value, Source: creepage.Sources[0]}
+	shown.Source.Governs = false
+	clearance.Because = "not under the clearance needed, " + clearance.Because
+	clearance.Shown = append([]gap.Beside[quantity.Length]{shown}, clearance.Shown...)
+	return clearance
+}
+
+// groupOf is the material group by index where one is given, else by name.
+func groupOf(g gap.Gap) (table.Group, gap.Source, error) {
+	if g.CTI != nil {
+		return table.GroupByCTI(*g.CTI)
+	}
+	return table.GroupByName(g.Material)
+}
+
+// degreeOn is the pollution degree at the surface: 1 under a coating or inside a board
+// (IEC 60664-3, type 1 protection, memory), else that of the site.
+func degreeOn(g gap.Gap) int {
+	if g.Medium != gap.PrintedBoard || g.PollutionDegree == 0 {
+		return g.PollutionDegree
+	}
+	switch g.Board {
+	case gap.Internal, gap.PolymerCoated, gap.ConformalCoated, gap.TerminationCoat:
+		return 1
+	}
+	return g.PollutionDegree
+}

@@ -1,0 +1,161 @@
+package insulation
+
+import (
+	"math"
+
+	"kilovet/hv/lack"
+	"kilovet/hv/quantity"
+	"kilovet/insulation/gap"
+	"kilovet/insulation/gas"
+	"kilovet/insulation/shape"
+	"kilovet/insulation/solve"
+	"kilovet/insulation/table"
+)
+
+// The inversions ask the same laws backwards: the gap or radius at which a law gives a
+// wanted value. What no gap or radius within the laws reaches is a lack.
+
+// ClearanceForBreakdown is the gap whose breakdown is at a voltage; its shape keeps its
+// sharpest radius.
+func ClearanceForBreakdown(g gap.Gap, v quantity.Voltage, sharp gap.Polarity) (quantity.Length, error) {
+	return overGaps(g, float64(v), func(g gap.Gap) (float64, error) {
+		a, err := Breakdown(g, sharp)
+		return float64(a.Value), err
+	})
+}
+
+// ClearanceForOnset is the gap at which a discharge starts at a voltage.
+func ClearanceForOnset(g gap.Gap, v quantity.Voltage) (quantity.Length, error) {
+	return overGaps(g, float64(v), func(g gap.Gap) (float64, error) {
+		a, err := Onset(g)
+		return float64(a.Value), err
+	})
+}
+
+// ClearanceForField is the gap whose peak field at a voltage is the given one. A radius
+// whose field stays above it at any gap is a lack.
+func ClearanceForField(g gap.Gap, v quantity.Voltage, limit quantity.Field) (quantity.Length, error) {
+	return overGaps(g, 1/float64(limit), func(g gap.Gap) (float64, error) {
+		a, err := FieldPeak(g, gap.Voltages{Peak: v})
+		return 1 / float64(a.Value), err
+	})
+}
+
+// RadiusForOnset is the sharpest radius, at the gap given, at which a discharge starts
+// at a voltage. What plates at that gap do not stand is a lack.
+func RadiusForOnset(g gap.Gap, v quantity.Voltage) (quantity.Length, error) {
+	return overRadii(g, float64(v), func(g gap.Gap) (float64, error) {
+		a, err := Onset(g)
+		return float64(a.Value), err
+	})
+}
+
+// RadiusForField is the sharpest radius, at the gap given, whose peak field at a voltage
+// is the given one.
+func RadiusForField(g gap.Gap, v quantity.Voltage, limit quantity.Field) (quantity.Length, error) {
+	return overRadii(g, 1/float64(limit), func(g gap.Gap) (float64, error) {
+		a, err := FieldPeak(g, gap.Voltages{Peak: v})
+		return 1 / float64(a.Value), err
+	})
+}
+
+// PeakByTable is the highest peak that the gap's clearance meets Table F.8 for, after
+// altitude and safety step. Past the last row it is that of the last row.
+func PeakByTable(g gap.Gap) (quantity.Voltage, error) {
+	if err := inAir(g); err != nil {
+		return 0, err
+	}
+	if g.Clearance <= 0 {
+		return 0, lack.Key("spacing.clearance")
+	}
+	factor, err := altitudeFactor(g)
+	if err != nil {
+		return 0, err
+	}
+	v, err := table.SteadyClearance(fieldCase(g).Case).Reach(g.Clearance / quantity.Length(factor.Value))
+	return v / safetyStep(g), err
+}
+
+// withGap is the gap with another clearance, its shape moved along.
+func withGap(g gap.Gap, d quantity.Length) gap.Gap {
+	g.Clearance = d
+	if g.Shape != nil {
+		s := shape.WithGap(*g.Shape, d)
+		g.Shape = &s
+	}
+	return g
+}
+
+// withRadius is the gap with another sharpest radius and the same clearance.
+func withRadius(g gap.Gap, r, d quantity.Length) gap.Gap {
+	s := shape.WithGap(g.Shape.WithSharpest(r), d)
+	g.Shape = &s
+	return g
+}
+
+// overGaps finds the gap at which a rising answer takes a value.
+func overGaps(g gap.Gap, want float64, answer func(gap.Gap) (float64, error)) (quantity.Length, error) {
+	s, err := gas.StateOf(g)
+	if err != nil && (g.Medium == gap.Air || g.Medium == gap.InGas) {
+		return 0, err
+	}
+	shortest, longest := reachOf(g, s)
+	return crossingOf(shortest, longest, want, func(d float64) (float64, error) {
+		return answer(withGap(g, quantity.Length(d)))
+	})
+}
+
+// overRadii finds the sharpest radius at which a rising answer takes a value.
+func overRadii(g gap.Gap, want float64, answer func(gap.Gap) (float64, error)) (quantity.Length, error) {
+	l, err := lineOf(g)
+	if err != nil {
+		return 0, err
+	}
+	if g.Shape.Kind == gap.Plates {
+		return 0, lack.Range("plates have no radius")
+	}
+	finest := float64(gas.FinestRadius)
+	if s, err := gas.StateOf(g); err == nil {
+		finest /= math.Min(1, float64(s.Density()))
+	}
+	d := l.Gap()
+	return crossingOf(finest*(1+1e-9), 1e3*float64(d), want, func(r float64) (float64, error) {
+		return answer(withRadius(g, quantity.Length(r), d))
+	})
+}
+
+// reachOf are the shortest and longest gaps the laws of a gap hold for.
+func reachOf(g gap.Gap, s gas.State) (shortest, longest float64) {
+	shortest, longest = 10e-6, 0.5
+	if s.Gas != gap.AirGas || (g.Medium != gap.Air && g.Medium != gap.InGas) {
+		return shortest, longest
+	}
+	if g.Shape != nil {
+		shortest = math.Max(shortest, 0.1e-3/float64(s.Density()))
+		if g.Shape.Kind == gap.Plates {
+			shortest, longest = 10e-6, 0.2/float64(s.Density())
+		}
+		shortest = math.Max(shortest, 1e-4*float64(g.Shape.Sharpest()))
+	}
+	return shortest * (1 + 1e-9), longest * (1 - 1e-9)
+}
+
+// crossingOf finds where a rising function takes a value, on a logarithmic scale.
+func crossingOf(lo, hi, want float64, f func(float64) (float64, error)) (quantity.Length, error) {
+	excess := func(u float64) (float64, error) {
+		y, err := f(lo * math.Exp(u-1))
+		return math.Log(y / want), err
+	}
+	top := 1 + math.Log(hi/lo)
+	for u, even := range map[float64]string{1: "more", top: "less"} {
+		y, err := excess(u)
+		if err != nil {
+			return 0, err
+		}
+		if (y > 0) == (even == "more") && y != 0 {
+			return 0, lack.Range("even %s, the end of the law, gives %s than is asked for", quantity.Text(quantity.Length(lo*math.Exp(u-1))), even)
+		}
+	}
+	u, err := solve.Rise(1, top, excess)
+	return quantity.Length(lo * math.Exp(u-1)), err
+}

@@ -1,0 +1,161 @@
+package insulation
+
+import (
+	"fmt"
+
+	"kilovet/hv/lack"
+	"kilovet/hv/quantity"
+	"kilovet/insulation/gap"
+	"kilovet/insulation/gas"
+	"kilovet/insulation/shape"
+)
+
+// FieldPeak is the highest field of the shape at the peak voltage, exact for the ideal
+// shape, an upper bound for a rounded edge. It holds in any medium that fills the gap
+// alone. Without a shape there is a lack.
+func FieldPeak(g gap.Gap, v gap.Voltages) (gap.Answer[quantity.Field], error) {
+	l, err := lineOf(g)
+	if err != nil {
+		return gap.Answer[quantity.Field]{}, err
+	}
+	a := gap.Answer[quantity.Field]{
+		Value:   l.Peak(v.Peak),
+		Because: fmt.Sprintf("%s, utilisation factor %.3g", g.Shape.Kind, float64(l.Utilisation())),
+		Sources: []gap.Source{{Text: "electrostatics of the ideal shape", Mark: gap.Derived, Governs: true}},
+	}
+	if l.Bound() {
+		a.Because += "; an upper bound, that of a full cylinder of the same radius"
+	}
+	return a, nil
+}
+
+// FieldLimit is the peak field of the shape at which a discharge starts.
+func FieldLimit(g gap.Gap) (gap.Answer[quantity.Field], error) {
+	return fieldAt(g, gap.ResultOf(Onset(g)))
+}
+
+// fieldAt is the peak field at the onset.
+func fieldAt(g gap.Gap, onset gap.Result[quantity.Voltage]) (gap.Answer[quantity.Field], error) {
+	if onset.Lack != nil {
+		return gap.Answer[quantity.Field]{}, onset.Lack
+	}
+	l, err := lineOf(g)
+	if err != nil {
+		return gap.Answer[quantity.Field]{}, err
+	}
+	a := gap.Answer[quantity.Field]{Value: l.Peak(onset.Value), Because: onset.Because, Sources: onset.Sources, Assumptions: onset.Assumptions}
+	for _, b := range onset.Shown {
+		a.Shown = append(a.Shown, gap.Beside[quantity.Field]{Value: l.Peak(b.Value), Source: b.Source})
+	}
+	return a, nil
+}
+
+func lineOf(g gap.Gap) (shape.Line, error) {
+	if g.Shape == nil {
+		return shape.Line{}, lack.Key("spacing.shape")
+	}
+	return shape.Of(*g.Shape, g.Clearance)
+}
+
+// Onset is the peak or DC voltage at which a discharge starts in a gas: between plates
+// the breakdown itself, else the streamer criterion along the critical line, with Peek's
+// laws shown where one belongs to the shape. Without a shape there is a lack: sharp
+// electrodes discharge from about 2 kV on.
+func Onset(g gap.Gap) (gap.Answer[quantity.Voltage], error) {
+	var none gap.Answer[quantity.Voltage]
+	if err := inGas(g); err != nil {
+		return none, err
+	}
+	l, err := lineOf(g)
+	if err != nil {
+		return none, err
+	}
+	s, err := gas.StateOf(g)
+	if err != nil {
+		return none, err
+	}
+	return onset(g, s, l)
+}
+
+func onset(g gap.Gap, s gas.State, l shape.Line) (gap.Answer[quantity.Voltage], error) {
+	if g.Shape.Kind == gap.Plates {
+		return gas.UniformBreakdown(s, l.Gap())
+	}
+	a, err := gas.Onset(s, l, g.Surface)
+	if err != nil {
+		return a, err
+	}
+	if peek, err := gas.PeekOnset(s, g.Shape.Kind, l); err == nil {
+		a.Shown = append(a.Shown, peek...)
+	}
+	return a, nil
+}
+
+// Breakdown is the peak or DC voltage that a gap in a gas breaks down at. Between
+// plates it is the law of uniform fields or Paschen's; round other shapes the onset or,
+// where it is higher in air, what sharp electrodes at the same distance stand; without a
+// shape it is that of needle points. The polarity is that of the sharper electrode; a
+// positive or unknown one against a blunt one stands less than a pair of needles.
+func Breakdown(g gap.Gap, sharp gap.Polarity) (gap.Answer[quantity.Voltage], error) {
+	return breakdown(g, sharp, gap.ResultOf(Onset(g)))
+}
+
+func breakdown(g gap.Gap, sharp gap.Polarity, starts gap.Result[quantity.Voltage]) (gap.Answer[quantity.Voltage], error) {
+	var none gap.Answer[quantity.Voltage]
+	if err := inGas(g); err != nil {
+		return none, err
+	}
+	s, err := gas.StateOf(g)
+	if err != nil {
+		return none, err
+	}
+	if g.Shape == nil {
+		return needles(g, s)
+	}
+	l, err := lineOf(g)
+	switch {
+	case err != nil:
+		return none, err
+	case (g.Shape.Kind == gap.Plates || s.Gas != gap.AirGas) && starts.Lack != nil:
+		return none, starts.Lack
+	case g.Shape.Kind == gap.Plates || s.Gas != gap.AirGas:
+		return starts.Answer, nil
+	}
+	return crossing(g, s, l, sharp, starts)
+}
+
+// needles is the breakdown of a gap whose electrodes are not described.
+func needles(g gap.Gap, s gas.State) (gap.Answer[quantity.Voltage], error) {
+	switch {
+	case s.Gas != gap.AirGas:
+		return gap.Answer[quantity.Voltage]{}, lack.Key("spacing.shape")
+	case g.Clearance <= 0:
+		return gap.Answer[quantity.Voltage]{}, lack.Key("spacing.clearance")
+	}
+	return gas.Needles(s, g.Clearance)
+}
+
+// crossing is the larger of onset and what sharp electrodes stand: a discharge that
+// starts earlier than it can cross stays a corona. A radius too fine for an onset is
+// sharp.
+func crossing(g gap.Gap, s gas.State, l shape.Line, polarity gap.Polarity, starts gap.Result[quantity.Voltage]) (gap.Answer[quantity.Voltage], error) {
+	law := gas.PointPlane
+	if twoSided(g.Shape.Kind) || polarity == gap.Negative {
+		law = gas.Needles
+	}
+	sharp, err := law(s, l.Gap())
+	if err != nil {
+		return gap.Answer[quantity.Voltage]{}, err
+	}
+	fine := quantity.Length(s.Density())*l.Radius() < gas.FinestRadius
+	switch {
+	case starts.Lack != nil && !fine:
+		return gap.Answer[quantity.Voltage]{}, starts.Lack
+	case starts.Lack != nil || sharp.Value > starts.Value:
+		return sharp, nil
+	}
+	return starts.Answer, nil
+}
+
+// twoSided says whether both electrodes of a shape are curved alike.
+func twoSided(k gap.Kind) bool { return k == gap.SphereSphere || k == gap.ParallelCylinders }

@@ -51,6 +51,7 @@ func TestKirchhoff(t *testing.T) {
 		c := build(randomNet(r))
 		s := must(Held(c, Fixed{"output", 20e3}))
 		held, _ := c.Node("output")
+		rounding := 10 * s.noise()
 		sum, gross := make([]float64, c.Nodes()), make([]float64, c.Nodes())
 		for _, e := range c.Elements {
 			i, err := s.Current(e.Name)
@@ -61,7 +62,7 @@ func TestKirchhoff(t *testing.T) {
 			sum[e.To] += float64(i)
 			noise := 1e-9 * math.Abs(float64(i))
 			if e.Kind == circuit.Resistor {
-				noise += 1e-14 * 20e3 / float64(e.Resistance) // rounding of the potentials
+				noise += rounding / float64(e.Resistance)
 			}
 			gross[e.From] += noise
 			gross[e.To] += noise
@@ -80,7 +81,7 @@ func TestPowerBalance(t *testing.T) {
 		c := build(randomNet(r))
 		s := must(Held(c, Fixed{"output", 20e3}))
 		held, _ := c.Node("output")
-		taken, noise := 0.0, 0.0
+		taken, noise, rounding := 0.0, 0.0, 10*s.noise()
 		for _, e := range c.Elements {
 			v, err := s.Across(e.Name)
 			if err != nil {
@@ -89,7 +90,7 @@ func TestPowerBalance(t *testing.T) {
 			p := float64(v) * float64(must(s.Current(e.Name)))
 			taken, noise = taken+p, noise+1e-9*math.Abs(p)
 			if e.Kind == circuit.Resistor {
-				noise += 1e-14 * 20e3 * 20e3 / float64(e.Resistance) // rounding of the potentials
+				noise += rounding * (20e3 + math.Abs(float64(v))) / float64(e.Resistance)
 			}
 		}
 		if delivered := 20e3 * drawnAt(s, held); math.Abs(delivered-taken) > noise {

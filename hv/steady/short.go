@@ -1,0 +1,104 @@
+package steady
+
+import (
+	"math"
+
+	"kilovet/hv/circuit"
+	"kilovet/hv/lack"
+	"kilovet/hv/quantity"
+)
+
+// Delivered is what a short at a node delivers.
+type Delivered struct {
+	// Charge is the magnitude of ∫ i dt through the short.
+	Charge quantity.Charge
+	// Energy is what was stored before less what is stored after, wherever it went.
+	Energy quantity.Energy
+	Work   Work
+}
+
+// Short joins a node ideally to ground until all currents cease: drive and heater
+// quiet but connected, loads off, a fixed bias kept, diodes without drop. How charge
+// parts among diodes that conduct at once rests on their resistances; these are all
+// the same and small beside every other resistance. Inductors count as connections.
+// A node that stands on ground already delivers nothing.
+//
+// Errors: a lack for a doubted capacitance, an unknown node.
+func Short(c *circuit.Circuit, from Voltages, node string) (Delivered, error) {
+	n, there := c.Node(node)
+	if !there {
+		return Delivered{}, lack.Failed("there is no node %s", node)
+	}
+	unloaded := c.Each(func(e *circuit.Element) bool { return e.Role != circuit.Load })
+	sources := quiet(unloaded, true)
+	alone, err := runDown(unloaded, from, sources)
+	if err != nil {
+		return Delivered{}, err
+	}
+	group := alone.net.mates(n)
+	if group[circuit.Ground] {
+		return Delivered{}, nil
+	}
+	r, err := runDown(unloaded, from, append(sources, tie{"the short", n, circuit.Ground, 0}))
+	if err != nil {
+		return Delivered{}, err
+	}
+	r.diode = r.smallDiode()
+	return r.deliver(group)
+}
+
+// smallDiode is a diode resistance well below every other: a thousandth of the
+// smallest, at most an ohm.
+func (r *rundown) smallDiode() float64 {
+	most := 0.0
+	for _, w := range r.wires {
+		most = math.Max(most, w.g)
+	}
+	return math.Min(1, 1e-3/most)
+}
+
+// quiet are the sources as connections; those of a fixed bias keep their voltage
+// where asked.
+func quiet(c *circuit.Circuit, bias bool) []tie {
+	var ties []tie
+	for _, e := range c.Elements {
+		if e.Kind != circuit.Source {
+			continue
+		}
+		t := tie{e.Name, e.From, e.To, 0}
+		if bias && e.Role == circuit.Series {
+			t.volts = mean(e.Wave)
+		}
+		ties = append(ties, t)
+	}
+	return ties
+}
+
+// deliver lets the shorted circuit run out. What the short carries is what the other
+// elements bring to the nodes it is joined to.
+func (r *rundown) deliver(group []bool) (Delivered, error) {
+	before, charge := r.energy(), 0.0
+	bring := func(e *edge, q float64) {
+		if group[e.element.To] && !group[e.element.From] {
+			charge += q
+		}
+		if group[e.element.From] && !group[e.element.To] {
+			charge -= q
+		}
+	}
+	for i := range r.stores {
+		bring(&r.stores[i].edge, -r.stores[i].c*r.stores[i].u)
+	}
+	p := pace{tolerance: 5e-4, floor: 1e-3 * r.highest(), done: 1e-9 * r.highest()}
+	err := r.run(p, func(float64) {})
+	for i := range r.stores {
+		bring(&r.stores[i].edge, r.stores[i].c*r.stores[i].u)
+	}
+	for i := range r.wires {
+		bring(&r.wires[i].edge, r.wires[i].charge)
+	}
+	for i := range r.valves {
+		bring(&r.valves[i].edge, r.valves[i].charge)
+	}
+	return Delivered{magnitude(quantity.Charge(charge)), quantity.Energy(before - r.energy()), r.work}, err
+}

@@ -21,6 +21,10 @@ var blur = rule.Rule{
 	Margin:  "marginal with less than 10 % in hand",
 	Concern: rule.Performance,
 	Sources: []rule.Source{blurSource},
+	Example: rule.Example{
+		Swaps:   []rule.Swap{{Was: `blur_allowance       = "12 nm"`, Becomes: `blur_allowance       = "4 nm"`}},
+		Changes: []rule.Change{{Rule: "beam.blur", Subject: "beam", Verdict: rule.Fails}},
+	},
 	Judge: func(e *evidence.Evidence) rule.Judgement {
 		b := e.Chain().Beam
 		if b == nil || !b.BlurAllowance.Set() {
@@ -54,6 +58,10 @@ var emissionLaw = rule.Rule{
 	Margin:  "marginal when more than 10 % apart, failing at 25 %",
 	Concern: rule.Performance,
 	Sources: []rule.Source{lawSource},
+	Example: rule.Example{
+		Swaps:   []rule.Swap{{Was: `emission            = "60 uA"`, Becomes: `emission            = "40 uA"`}},
+		Changes: []rule.Change{{Rule: "gun.emission_law", Subject: "gun", Verdict: rule.Fails}},
+	},
 	Judge: func(e *evidence.Evidence) rule.Judgement {
 		g := e.Chain().Gun
 		if !g.IsFitted() || !g.Emission.Set() || !g.Cutoff.Set() || !g.ZeroBiasEmission.Set() || e.Chain().Bias == nil {

@@ -20,6 +20,10 @@ var capacitorVoltage = rule.Rule{
 	Margin:  "marginal above 60 % of the rating",
 	Concern: rule.Equipment,
 	Sources: []rule.Source{limits.CapacitorVoltage.Source},
+	Example: rule.Example{
+		Swaps:   []rule.Swap{{Was: `rated_voltage = "8.5 kV"`, Becomes: `rated_voltage = "4.5 kV"`}},
+		Changes: []rule.Change{{Rule: "capacitor.voltage", Subject: "multiplier.smoothing_capacitor", Verdict: rule.Fails}},
+	},
 	Judge: func(e *evidence.Evidence) rule.Judgement {
 		return each(groups(e, isCapacitor), "no capacitor is described", func(g group) rule.Finding { return judgeCapacitor(e, g) })
 	},
@@ -41,6 +45,10 @@ var capacitorDielectric = rule.Rule{
 	Applies: "Every capacitor that the description gives as a part.",
 	Concern: rule.Performance,
 	Sources: []rule.Source{dielectricSource},
+	Example: rule.Example{
+		Swaps:   []rule.Swap{{Was: `, dielectric = "film"`, Becomes: ""}},
+		Changes: []rule.Change{{Rule: "capacitor.dielectric", Subject: "bias.bypass", Verdict: rule.Marginal}},
+	},
 	Judge: func(e *evidence.Evidence) rule.Judgement {
 		return each(groups(e, isCapacitor), "no capacitor is described", judgeDielectric)
 	},

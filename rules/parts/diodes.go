@@ -17,6 +17,10 @@ var diodeReverse = rule.Rule{
 	Margin:  "marginal above 70 % of the rating",
 	Concern: rule.Equipment,
 	Sources: []rule.Source{limits.DiodeReverse.Source},
+	Example: rule.Example{
+		Swaps:   []rule.Swap{{Was: `diode = { rated_voltage = "8 kV"`, Becomes: `diode = { rated_voltage = "4.2 kV"`}},
+		Changes: []rule.Change{{Rule: "diode.reverse_voltage", Subject: "multiplier.diode", Verdict: rule.Fails}},
+	},
 	Judge: func(e *evidence.Evidence) rule.Judgement {
 		return each(groups(e, isDiode), "no diode is described", func(g group) rule.Finding {
 			rated, at := g.elements[0].DiodeRating()
@@ -34,6 +38,10 @@ var diodeCurrent = rule.Rule{
 	Margin:  "marginal above 50 % of the rating",
 	Concern: rule.Equipment,
 	Sources: []rule.Source{limits.DiodeCurrent.Source},
+	Example: rule.Example{
+		Swaps:   []rule.Swap{{Was: `rated_current = "5 mA"`, Becomes: `rated_current = "100 uA"`}},
+		Changes: []rule.Change{{Rule: "diode.mean_current", Subject: "multiplier.diode", Verdict: rule.Fails}},
+	},
 	Judge: func(e *evidence.Evidence) rule.Judgement {
 		return each(groups(e, hasDiodePart), "no multiplier diode is described", func(g group) rule.Finding {
 			rated := g.elements[0].DiodePart.RatedCurrent

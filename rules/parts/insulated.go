@@ -15,6 +15,10 @@ var cableVoltage = rule.Rule{
 	Margin:  "marginal above 80 % of the rating",
 	Concern: rule.Life,
 	Sources: []rule.Source{limits.InsulationVoltage.Source},
+	Example: rule.Example{
+		Swaps:   []rule.Swap{{Was: "rated_voltage = \"40 kV\"\ngun_end", Becomes: "rated_voltage = \"22 kV\"\ngun_end"}},
+		Changes: []rule.Change{{Rule: "cable.voltage", Subject: "cable", Verdict: rule.Fails}},
+	},
 	Judge: func(e *evidence.Evidence) rule.Judgement {
 		cable := e.Chain().Cable
 		if cable == nil {
@@ -31,6 +35,10 @@ var feedVoltage = rule.Rule{
 	Margin:  "marginal above 80 % of the rating",
 	Concern: rule.Life,
 	Sources: []rule.Source{limits.InsulationVoltage.Source},
+	Example: rule.Example{
+		Swaps:   []rule.Swap{{Was: `"isolation transformer", rated_voltage = "40 kV"`, Becomes: `"isolation transformer", rated_voltage = "22 kV"`}},
+		Changes: []rule.Change{{Rule: "feed.voltage", Subject: "heater.feed", Verdict: rule.Fails}},
+	},
 	Judge: func(e *evidence.Evidence) rule.Judgement {
 		h := e.Chain().Heater
 		if h == nil || h.Feed == nil || h.Feed.Kind.V == "battery" {
@@ -55,6 +63,10 @@ var feedTest = rule.Rule{
 	Margin:  "marginal below 1.5 times the highest voltage",
 	Concern: rule.Life,
 	Sources: []rule.Source{limits.FeedTestSource},
+	Example: rule.Example{
+		Swaps:   []rule.Swap{{Was: `test_voltage = "50 kV"`, Becomes: `test_voltage = "25 kV"`}},
+		Changes: []rule.Change{{Rule: "feed.test_voltage", Subject: "heater.feed", Verdict: rule.Fails}},
+	},
 	Judge: func(e *evidence.Evidence) rule.Judgement {
 		h := e.Chain().Heater
 		if h == nil || h.Feed == nil || h.Feed.Kind.V == "battery" {

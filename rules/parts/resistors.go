@@ -20,6 +20,10 @@ var resistorVoltage = rule.Rule{
 	Margin:  "marginal above 80 % of the rating",
 	Concern: rule.Equipment,
 	Sources: []rule.Source{limits.ResistorVoltage.Source},
+	Example: rule.Example{
+		Swaps:   []rule.Swap{{Was: `rated_voltage = "5 kV", rated_power = "500 mW"`, Becomes: `rated_voltage = "2.2 kV", rated_power = "500 mW"`}},
+		Changes: []rule.Change{{Rule: "resistor.voltage", Subject: "divider.upper", Verdict: rule.Fails}},
+	},
 	Judge: func(e *evidence.Evidence) rule.Judgement {
 		return each(groups(e, isResistor), "no resistor is described", func(g group) rule.Finding {
 			part := g.elements[0].ResistorPart
@@ -42,6 +46,10 @@ var resistorPower = rule.Rule{
 	Margin:  "marginal above 50 % of the rating",
 	Concern: rule.Equipment,
 	Sources: []rule.Source{limits.ResistorPower.Source},
+	Example: rule.Example{
+		Swaps:   []rule.Swap{{Was: `rated_voltage = "5 kV", rated_power = "500 mW"`, Becomes: `rated_voltage = "5 kV", rated_power = "20 mW"`}},
+		Changes: []rule.Change{{Rule: "resistor.power", Subject: "divider.upper", Verdict: rule.Fails}},
+	},
 	Judge: func(e *evidence.Evidence) rule.Judgement {
 		return each(groups(e, isResistor), "no resistor is described", func(g group) rule.Finding { return judgePower(e, g) })
 	},
@@ -87,6 +95,10 @@ var arcVoltage = rule.Rule{
 	Margin:  "marginal above 80 % of the single-pulse rating",
 	Concern: rule.Equipment,
 	Sources: []rule.Source{limits.ArcSource, limits.SinglePulse.Source},
+	Example: rule.Example{
+		Swaps:   []rule.Swap{{Was: `rated_pulse_voltage = "25 kV"`, Becomes: `rated_pulse_voltage = "10 kV"`}},
+		Changes: []rule.Change{{Rule: "series.arc_voltage", Subject: "cable.gun_end_resistor", Verdict: rule.Fails}},
+	},
 	Judge: func(e *evidence.Evidence) rule.Judgement {
 		return each(groups(e, isSeries), "no series resistor is described", func(g group) rule.Finding { return judgeArcVoltage(e, g) })
 	},
@@ -123,6 +135,10 @@ var arcEnergy = rule.Rule{
 	Margin:  "marginal above 80 % of the single-pulse rating",
 	Concern: rule.Equipment,
 	Sources: []rule.Source{limits.ArcSource, limits.SinglePulse.Source},
+	Example: rule.Example{
+		Swaps:   []rule.Swap{{Was: `rated_energy = "2.5 J"`, Becomes: `rated_energy = "0.1 J"`}},
+		Changes: []rule.Change{{Rule: "series.arc_energy", Subject: "cable.gun_end_resistor", Verdict: rule.Fails}},
+	},
 	Judge: func(e *evidence.Evidence) rule.Judgement {
 		return each(groups(e, isDamping), "no filter or gun-end resistor is described", func(g group) rule.Finding { return judgeArcEnergy(e, g) })
 	},

@@ -26,6 +26,13 @@ var enclosure = rule.Rule{
 	Applies: "Where a node holds more charge or energy than may be touched.",
 	Concern: rule.Life,
 	Sources: []rule.Source{limits.EnclosureSource},
+	Example: rule.Example{
+		Swaps: []rule.Swap{{Was: `enclosure       = "interlocked"`, Becomes: `enclosure       = "open"`}},
+		Changes: []rule.Change{
+			{Rule: "access.enclosure", Subject: "chain", Verdict: rule.Fails},
+			{Rule: "access.interlock", Subject: "chain"},
+		},
+	},
 	Judge: func(e *evidence.Evidence) rule.Judgement {
 		f := rule.Finding{Rule: "access.enclosure", Subject: "chain", Concern: rule.Life, Relation: rule.Presence, Sources: []rule.Source{limits.EnclosureSource}}
 		access, done := needsCare(e, f)
@@ -48,6 +55,10 @@ var interlock = rule.Rule{
 	Applies: "Where the enclosure is interlocked.",
 	Concern: rule.Life,
 	Sources: []rule.Source{limits.InterlockSource},
+	Example: rule.Example{
+		Swaps:   []rule.Swap{{Was: `switches = 2`, Becomes: `switches = 1`}},
+		Changes: []rule.Change{{Rule: "access.interlock", Subject: "chain", Verdict: rule.Fails}},
+	},
 	Judge: func(e *evidence.Evidence) rule.Judgement {
 		access := e.Chain().Access
 		if access == nil || access.Enclosure.V != "interlocked" {
@@ -83,6 +94,10 @@ var bonds = rule.Rule{
 	Applies: "Where a supply is described.",
 	Concern: rule.Life,
 	Sources: []rule.Source{limits.BondSource, limits.TwoBondsSource},
+	Example: rule.Example{
+		Swaps:   []rule.Swap{{Was: `resistance = "0.05 ohm"`, Becomes: `resistance = "0.5 ohm"`}},
+		Changes: []rule.Change{{Rule: "access.earth_bond", Subject: "chain", Verdict: rule.Fails}},
+	},
 	Judge: func(e *evidence.Evidence) rule.Judgement {
 		if !e.HasSupply() {
 			return rule.Over("no supply is described")
@@ -121,6 +136,10 @@ var restart = rule.Rule{
 	Applies: "Where a supply is described.",
 	Concern: rule.Life,
 	Sources: []rule.Source{limits.RestartSource},
+	Example: rule.Example{
+		Swaps:   []rule.Swap{{Was: `restart      = "manual"`, Becomes: `restart      = "automatic"`}},
+		Changes: []rule.Change{{Rule: "protection.restart", Subject: "chain", Verdict: rule.Fails}},
+	},
 	Judge: func(e *evidence.Evidence) rule.Judgement {
 		if !e.HasSupply() {
 			return rule.Over("no supply is described")

@@ -17,7 +17,14 @@ var waiting = rule.Rule{
 	Margin:  "marginal where the waiting time is less than 1.25 times the time computed",
 	Concern: rule.Life,
 	Sources: []rule.Source{limits.DischargeSource, limits.InteriorSource},
-	Judge:   judgeWaiting,
+	Example: rule.Example{
+		Swaps: []rule.Swap{{Was: `waiting_time    = "90 s"`, Becomes: `waiting_time    = "4 s"`}},
+		Changes: []rule.Change{
+			{Rule: "discharge.waiting_time", Subject: "chain", Verdict: rule.Fails},
+			{Rule: "bleeder.redundancy", Subject: "chain", Verdict: rule.Fails},
+		},
+	},
+	Judge: judgeWaiting,
 }
 
 const waitingMargin = 0.25
@@ -73,7 +80,14 @@ var redundancy = rule.Rule{
 	Applies: "Where a node holds more charge or energy than may be touched.",
 	Concern: rule.Life,
 	Sources: []rule.Source{limits.RedundancySource},
-	Judge:   judgeRedundancy,
+	Example: rule.Example{
+		Swaps: []rule.Swap{
+			{Was: "leakage = \"1 nA\" }\npermanent = true", Becomes: "leakage = \"1 nA\" }\npermanent = false"},
+			{Was: `count = 4, strings = 2, rated_voltage = "15 kV"`, Becomes: `count = 4, strings = 1, rated_voltage = "15 kV"`},
+		},
+		Changes: []rule.Change{{Rule: "bleeder.redundancy", Subject: "chain", Verdict: rule.Fails}},
+	},
+	Judge: judgeRedundancy,
 }
 
 func judgeRedundancy(e *evidence.Evidence) rule.Judgement {

@@ -15,6 +15,14 @@ var rod = rule.Rule{
 	Applies: "Where a node holds more charge or energy than may be touched.",
 	Concern: rule.Life,
 	Sources: []rule.Source{limits.RodSource},
+	Example: rule.Example{
+		Swaps: []rule.Swap{{Was: `earthing_rod    = { resistance = "100 kohm", rated_voltage = "50 kV", rated_energy = "20 J" }`, Becomes: ""}},
+		Changes: []rule.Change{
+			{Rule: "rod.there", Subject: "chain", Verdict: rule.Fails},
+			{Rule: "rod.voltage", Subject: "earthing rod"},
+			{Rule: "rod.energy", Subject: "earthing rod"},
+		},
+	},
 	Judge: func(e *evidence.Evidence) rule.Judgement {
 		f := rule.Finding{Rule: "rod.there", Subject: "chain", Concern: rule.Life, Relation: rule.Presence, Sources: []rule.Source{limits.RodSource}}
 		access, done := needsCare(e, f)
@@ -37,6 +45,10 @@ var rodVoltage = rule.Rule{
 	Margin:  "marginal above 80 % of the rating",
 	Concern: rule.Life,
 	Sources: []rule.Source{limits.RodSource, limits.InsulationVoltage.Source},
+	Example: rule.Example{
+		Swaps:   []rule.Swap{{Was: `rated_voltage = "50 kV", rated_energy = "20 J"`, Becomes: `rated_voltage = "20 kV", rated_energy = "20 J"`}},
+		Changes: []rule.Change{{Rule: "rod.voltage", Subject: "earthing rod", Verdict: rule.Fails}},
+	},
 	Judge: func(e *evidence.Evidence) rule.Judgement {
 		r, over := described(e)
 		if r == nil {
@@ -71,6 +83,10 @@ var rodEnergy = rule.Rule{
 	Margin:  "marginal above 80 % of the rating",
 	Concern: rule.Life,
 	Sources: []rule.Source{limits.RodSource, limits.SinglePulse.Source},
+	Example: rule.Example{
+		Swaps:   []rule.Swap{{Was: `rated_energy = "20 J"`, Becomes: `rated_energy = "0.2 J"`}},
+		Changes: []rule.Change{{Rule: "rod.energy", Subject: "earthing rod", Verdict: rule.Fails}},
+	},
 	Judge: func(e *evidence.Evidence) rule.Judgement {
 		r, over := described(e)
 		if r == nil {

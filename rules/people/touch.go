@@ -18,7 +18,11 @@ var touch = rule.Rule{
 	Applies: "Every node listed as touchable, in every state.",
 	Concern: rule.Life,
 	Sources: []rule.Source{limits.TouchVoltageSource, limits.TouchCurrentSource, limits.TouchChargeSource, limits.TouchEnergySource, limits.StricterCharge},
-	Judge:   judgeTouch,
+	Example: rule.Example{
+		Swaps:   []rule.Swap{{Was: `touchable       = ["divider.tap"]`, Becomes: `touchable       = ["divider.tap", "cathode"]`}},
+		Changes: []rule.Change{{Rule: "touch.voltage", Subject: "cathode", Verdict: rule.Fails}},
+	},
+	Judge: judgeTouch,
 }
 
 func judgeTouch(e *evidence.Evidence) rule.Judgement {

@@ -27,9 +27,10 @@ type Judgement struct {
 // Over is the judgement of a rule that does not apply.
 func Over(because string) Judgement { return Judgement{PassedOver: because} }
 
-// Example shows the rule at work: a change of one to three keys of the built-in
+// Example shows the rule at work: a change of one to three keys of a built-in
 // description and every finding that changes with it.
 type Example struct {
+	Of      string // the built-in description that is changed; "column" where empty
 	Swaps   []Swap
 	Changes []Change
 }

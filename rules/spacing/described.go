@@ -23,7 +23,14 @@ var described = rule.Rule{
 	Applies: "Where a supply is described.",
 	Concern: rule.Life,
 	Sources: []rule.Source{describedSource},
-	Judge:   judgeDescribed,
+	Example: rule.Example{
+		Swaps: []rule.Swap{{Was: "also       = [\"cathode\"]\n", Becomes: ""}},
+		Changes: []rule.Change{
+			{Rule: "spacing.described", Subject: "chain"},
+			{Rule: "spacing.described", Subject: "cathode to ground", Verdict: rule.Unassessed},
+		},
+	},
+	Judge: judgeDescribed,
 }
 
 func judgeDescribed(e *evidence.Evidence) rule.Judgement {

@@ -25,6 +25,10 @@ var clearance = rule.Rule{
 		{Text: "IEC 60664-1:2020 Table F.8, case A unless impulse tested", Mark: rule.Read, Governs: true},
 		{Text: "IEC 60664-1:2020 Table F.2 where mains or drive reach the gap", Mark: rule.Read},
 	},
+	Example: rule.Example{
+		Swaps:   []rule.Swap{{Was: "clearance  = \"12 mm\"\ncreepage   = \"30 mm\"", Becomes: "clearance  = \"1.2 mm\"\ncreepage   = \"30 mm\""}},
+		Changes: []rule.Change{{Rule: "spacing.clearance", Subject: "drive lead to the enclosure", Verdict: rule.Fails}},
+	},
 	Judge: func(e *evidence.Evidence) rule.Judgement {
 		return each(e, func(s *chain.Spacing) (rule.Finding, string) {
 			if !inAir(s) {
@@ -42,6 +46,10 @@ var creepage = rule.Rule{
 	Margin:  "marginal with less than 10 % in hand",
 	Concern: rule.Life,
 	Sources: []rule.Source{{Text: "IEC 60664-1:2020 Table F.5", Mark: rule.Read, Governs: true}},
+	Example: rule.Example{
+		Swaps:   []rule.Swap{{Was: `creepage   = "150 mm"`, Becomes: `creepage   = "30 mm"`}},
+		Changes: []rule.Change{{Rule: "spacing.creepage", Subject: "gun feedthrough, air side", Verdict: rule.Fails}},
+	},
 	Judge: func(e *evidence.Evidence) rule.Judgement {
 		return each(e, func(s *chain.Spacing) (rule.Finding, string) {
 			if !inAir(s) {

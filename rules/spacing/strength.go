@@ -24,6 +24,17 @@ var breakdown = rule.Rule{
 	Margin:  "marginal above 50 % of the estimate",
 	Concern: rule.Life,
 	Sources: []rule.Source{breakdownSource},
+	Example: rule.Example{
+		Swaps: []rule.Swap{
+			{Was: `clearance  = "110 mm"`, Becomes: `clearance  = "8 mm"`},
+			{Was: `outer_radius = "122 mm"`, Becomes: `outer_radius = "20 mm"`},
+		},
+		Changes: []rule.Change{
+			{Rule: "spacing.clearance", Subject: "gun feedthrough, air side", Verdict: rule.Fails},
+			{Rule: "spacing.breakdown", Subject: "gun feedthrough, air side", Verdict: rule.Fails},
+			{Rule: "spacing.corona", Subject: "gun feedthrough, air side", Verdict: rule.Marginal},
+		},
+	},
 	Judge: func(e *evidence.Evidence) rule.Judgement {
 		return each(e, func(s *chain.Spacing) (rule.Finding, string) { return judgeBreakdown(e, s), "" })
 	},
@@ -63,6 +74,10 @@ var corona = rule.Rule{
 	Margin:  "marginal with less than 10 % in hand or with corona; it never fails",
 	Concern: rule.Performance,
 	Sources: []rule.Source{coronaSource},
+	Example: rule.Example{
+		Swaps:   []rule.Swap{{Was: `inner_radius = "12 mm", outer_radius = "122 mm"`, Becomes: `inner_radius = "0.3 mm", outer_radius = "110.3 mm"`}},
+		Changes: []rule.Change{{Rule: "spacing.corona", Subject: "gun feedthrough, air side", Verdict: rule.Marginal}},
+	},
 	Judge: func(e *evidence.Evidence) rule.Judgement {
 		return each(e, func(s *chain.Spacing) (rule.Finding, string) { return judgeCorona(e, s) })
 	},

@@ -18,6 +18,10 @@ var dividerClamp = rule.Rule{
 	Applies: "Where an open lower arm would lift the tap above 60 V.",
 	Concern: rule.Life,
 	Sources: []rule.Source{clampSource},
+	Example: rule.Example{
+		Swaps:   []rule.Swap{{Was: `clamp  = { voltage = "90 V", kind = "gas tube", leakage = "1 nA" }`, Becomes: ""}},
+		Changes: []rule.Change{{Rule: "divider.clamp", Subject: "divider.tap", Verdict: rule.Fails}},
+	},
 	Judge: func(e *evidence.Evidence) rule.Judgement {
 		d := e.Chain().Divider
 		if d == nil {
@@ -51,6 +55,10 @@ var meterRating = rule.Rule{
 	Margin:  "marginal above 80 % of the rating",
 	Concern: rule.Equipment,
 	Sources: []rule.Source{clampSource, limits.InsulationVoltage.Source},
+	Example: rule.Example{
+		Swaps:   []rule.Swap{{Was: `rated_voltage = "300 V"`, Becomes: `rated_voltage = "80 V"`}},
+		Changes: []rule.Change{{Rule: "divider.meter_voltage", Subject: "divider.meter", Verdict: rule.Fails}},
+	},
 	Judge: func(e *evidence.Evidence) rule.Judgement {
 		d := e.Chain().Divider
 		if d == nil || d.Meter == nil {
@@ -84,6 +92,10 @@ var errorKnown = rule.Rule{
 	Margin:  "marginal above 5 %",
 	Concern: rule.Performance,
 	Sources: []rule.Source{errorSource},
+	Example: rule.Example{
+		Swaps:   []rule.Swap{{Was: `rated_power = "500 mW", tolerance = "1 %", temperature_coefficient = "50 ppm/K", voltage_coefficient = "-1 ppm/V"`, Becomes: `rated_power = "500 mW", tolerance = "12 %", temperature_coefficient = "50 ppm/K", voltage_coefficient = "-1 ppm/V"`}},
+		Changes: []rule.Change{{Rule: "divider.error", Subject: "divider", Verdict: rule.Fails}},
+	},
 	Judge: func(e *evidence.Evidence) rule.Judgement {
 		d := e.Chain().Divider
 		if d == nil {

@@ -21,6 +21,10 @@ var headroom = rule.Rule{
 	Margin:  "marginal with less than 5 % in hand",
 	Concern: rule.Performance,
 	Sources: []rule.Source{headroomSource},
+	Example: rule.Example{
+		Swaps:   []rule.Swap{{Was: `peak       = "1.85 kV"`, Becomes: `peak       = "1.7 kV"`}},
+		Changes: []rule.Change{{Rule: "drive.headroom", Subject: "drive", Verdict: rule.Fails}},
+	},
 	Judge: func(e *evidence.Evidence) rule.Judgement {
 		c := e.Chain()
 		if c.Regulation == nil {
@@ -40,30 +44,6 @@ var headroom = rule.Rule{
 
 func one(f rule.Finding) rule.Judgement { return rule.Judgement{Findings: []rule.Finding{f}} }
 
-var limitSource = rule.Source{Text: "what the output reaches with regulation lost decides ratings and clearances", Mark: rule.Practice, Governs: true}
-
-var driveLimit = rule.Rule{
-	ID: "drive.limit", Title: "Drive with regulation lost",
-	Demands: "It is stated how far the drive goes if regulation is lost.",
-	Applies: "Where the output is regulated.",
-	Concern: rule.Equipment,
-	Sources: []rule.Source{limitSource},
-	Judge: func(e *evidence.Evidence) rule.Judgement {
-		c := e.Chain()
-		if c.Regulation == nil {
-			return rule.Over("the output is not regulated")
-		}
-		f := rule.Finding{Rule: "drive.limit", Subject: "drive", Concern: rule.Equipment, Relation: rule.Presence, Place: c.Drive.PeakLimit.Place,
-			Sources: []rule.Source{limitSource}}
-		if !c.Drive.PeakLimit.Set() {
-			f.Place = c.Drive.Here()
-			return one(f.Lacking(lack.Key(c.Drive.PeakLimit.Key)))
-		}
-		f.Because = "the drive reaches " + quantity.Text(c.Drive.PeakLimit.V) + " peak at most"
-		return one(f.There(true))
-	},
-}
-
 var balanceSource = rule.Source{Text: "at light load a fraction of a per cent of unbalance gives a symmetrical cascade the ripple of a half-wave one (charge balance)", Mark: rule.Derived, Governs: true}
 
 var balance = rule.Rule{
@@ -72,6 +52,11 @@ var balance = rule.Rule{
 	Applies: "Where the multiplier is symmetrical.",
 	Concern: rule.Performance,
 	Sources: []rule.Source{balanceSource},
+	Example: rule.Example{
+		Of:      "positive",
+		Swaps:   []rule.Swap{{Was: `unbalance  = "1 %"`, Becomes: ""}},
+		Changes: []rule.Change{{Rule: "multiplier.balance", Subject: "multiplier.ripple", Verdict: rule.Unassessed}},
+	},
 	Judge: func(e *evidence.Evidence) rule.Judgement {
 		c := e.Chain()
 		if c.Multiplier == nil || !c.Multiplier.Symmetrical() {

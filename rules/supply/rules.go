@@ -9,5 +9,5 @@ func missing(key string) error { return lack.Key(key) }
 
 // Rules lists the rules of this family.
 func Rules() []rule.Rule {
-	return []rule.Rule{headroom, driveLimit, balance, dividerClamp, meterRating, errorKnown}
+	return []rule.Rule{headroom, balance, dividerClamp, meterRating, errorKnown}
 }

@@ -1,0 +1,202 @@
+package rules_test
+
+import (
+	"bytes"
+	"os"
+	"path/filepath"
+	"strings"
+	"testing"
+
+	"github.com/google/go-cmp/cmp"
+
+	"kilovet/hv/chain"
+	"kilovet/rules"
+	"kilovet/rules/figure"
+	"kilovet/rules/rule"
+)
+
+// described reads one of the descriptions that come with the project.
+func described(t *testing.T, name string) []byte {
+	t.Helper()
+	data, err := os.ReadFile(filepath.Join("..", "testdata", "chains", name+".toml"))
+	if err != nil {
+		t.Fatal(err)
+	}
+	return data
+}
+
+func reviewed(t *testing.T, data []byte) *rules.Review {
+	t.Helper()
+	c, faults := chain.Read(data)
+	if len(faults) > 0 {
+		t.Fatal(faults)
+	}
+	return rules.Run(c, nil, rules.Program{Name: "kilovet"})
+}
+
+func TestRulesAreWhole(t *testing.T) {
+	seen := map[string]bool{}
+	for _, r := range rules.All() {
+		if seen[r.ID] {
+			t.Errorf("%s twice", r.ID)
+		}
+		seen[r.ID] = true
+		if r.Title == "" || r.Demands == "" || r.Applies == "" || r.Concern == "" || len(r.Sources) == 0 || r.Judge == nil {
+			t.Errorf("%s is not whole", r.ID)
+		}
+		if len(r.Example.Swaps) == 0 || len(r.Example.Swaps) > 3 || len(r.Example.Changes) == 0 {
+			t.Errorf("%s has no example of one to three keys", r.ID)
+		}
+		for _, s := range r.Sources {
+			if s.Text == "" || s.Mark == "" {
+				t.Errorf("%s has a source without text or mark", r.ID)
+			}
+		}
+	}
+}
+
+func TestFiguresAreDeclaredOnce(t *testing.T) {
+	seen := map[string]bool{}
+	for _, d := range figure.List {
+		if seen[d.ID] || d.What == "" || d.Unit == "" {
+			t.Errorf("%s is not declared once and whole", d.ID)
+		}
+		seen[d.ID] = true
+	}
+}
+
+// TestExamples applies each rule's example to the description it changes and wants
+// the whole set of findings that differ, no more and no less.
+func TestExamples(t *testing.T) {
+	base := map[string]map[string]rule.Verdict{}
+	for _, r := range rules.All() {
+		name := r.Example.Of
+		if name == "" {
+			name = "column"
+		}
+		data := described(t, name)
+		if base[name] == nil {
+			base[name] = verdicts(reviewed(t, data))
+		}
+		t.Run(r.ID, func(t *testing.T) {
+			want := map[string]rule.Verdict{}
+			for _, c := range r.Example.Changes {
+				want[c.Rule+" | "+c.Subject] = c.Verdict
+			}
+			got := changed(base[name], verdicts(reviewed(t, swapped(t, data, r.Example.Swaps))))
+			if d := cmp.Diff(want, got); d != "" {
+				t.Error(d)
+			}
+		})
+	}
+}
+
+func swapped(t *testing.T, data []byte, swaps []rule.Swap) []byte {
+	for _, s := range swaps {
+		if n := bytes.Count(data, []byte(s.Was)); n != 1 {
+			t.Fatalf("%q stands %d times in the description", s.Was, n)
+		}
+		data = bytes.Replace(data, []byte(s.Was), []byte(s.Becomes), 1)
+	}
+	return data
+}
+
+func verdicts(r *rules.Review) map[string]rule.Verdict {
+	all := map[string]rule.Verdict{}
+	for _, f := range r.Findings {
+		all[f.Rule+" | "+f.Subject] = f.Verdict
+	}
+	return all
+}
+
+func changed(was, is map[string]rule.Verdict) map[string]rule.Verdict {
+	differs := map[string]rule.Verdict{}
+	for k, v := range is {
+		if was[k] != v {
+			differs[k] = v
+		}
+	}
+	for k := range was {
+		if _, ok := is[k]; !ok {
+			differs[k] = ""
+		}
+	}
+	return differs
+}
+
+func TestSoundChainsPass(t *testing.T) {
+	for _, name := range []string{"column", "positive", "spacings"} {
+		r := reviewed(t, described(t, name))
+		for _, f := range r.Findings {
+			if f.Verdict == rule.Fails || f.Verdict == rule.Unassessed {
+				t.Errorf("%s: %s %s %s: %s", name, f.Verdict, f.Rule, f.Subject, f.Because)
+			}
+		}
+	}
+}
+
+// TestPlantedFaults wants the findings that stand as comments beside the lines
+// concerned: "# fails rule.id" or "# unassessed rule.id", and none besides.
+func TestPlantedFaults(t *testing.T) {
+	data := described(t, "faulty")
+	want := planted(string(data))
+	if len(want) < 12 {
+		t.Fatalf("%d faults are planted, at least twelve are wanted", len(want))
+	}
+	got := map[finding]bool{}
+	for _, f := range reviewed(t, data).Findings {
+		if f.Verdict == rule.Fails || f.Verdict == rule.Unassessed {
+			got[finding{f.Place.Line, string(f.Verdict), f.Rule}] = true
+		}
+	}
+	if d := cmp.Diff(want, got, cmp.AllowUnexported(finding{})); d != "" {
+		t.Error(d)
+	}
+}
+
+type finding struct {
+	line    int
+	verdict string
+	rule    string
+}
+
+func planted(text string) map[finding]bool {
+	all := map[finding]bool{}
+	for i, line := range strings.Split(text, "\n") {
+		_, notes, _ := strings.Cut(line, "# ")
+		for _, note := range strings.Split(notes, "; ") {
+			words := strings.Fields(note)
+			if len(words) == 2 && (words[0] == "fails" || words[0] == "unassessed") {
+				all[finding{i + 1, words[0], words[1]}] = true
+			}
+		}
+	}
+	return all
+}
+
+func TestNoFindingAndNoFigureTwice(t *testing.T) {
+	for _, name := range []string{"column", "positive", "spacings", "faulty"} {
+		r := reviewed(t, described(t, name))
+		seen := map[string]bool{}
+		for _, f := range r.Findings {
+			key := f.Rule + "|" + f.Subject
+			if seen[key] {
+				t.Errorf("%s: finding %s twice", name, key)
+			}
+			seen[key] = true
+			if f.Because == "" || f.Relation == "" || f.Concern == "" || f.Verdict != rule.Meets && f.Remedy == "" {
+				t.Errorf("%s: %s is not whole: %+v", name, key, f)
+			}
+		}
+		for _, f := range r.Figures {
+			key := f.ID + "|" + f.Subject + "|" + f.State
+			if seen[key] {
+				t.Errorf("%s: figure %s twice", name, key)
+			}
+			seen[key] = true
+			if f.Basis == "" {
+				t.Errorf("%s: %s has no basis", name, key)
+			}
+		}
+	}
+}

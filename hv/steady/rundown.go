@@ -64,6 +64,9 @@ type flow struct{ first, charge float64 }
 // runDown prepares a circuit to be left to itself from the given potentials. Ideal
 // connections are those given beside inductors, whose ringing is not followed.
 func runDown(c *circuit.Circuit, from Voltages, given []tie) (*rundown, error) {
+	if len(from) != c.Nodes() {
+		panic("steady: potentials of another circuit")
+	}
 	for _, e := range c.Elements {
 		if e.Kind == circuit.Inductor {
 			given = append(given, tie{e.Name, e.From, e.To, 0})

@@ -44,6 +44,35 @@ func TestCutoffGivesTheTableBack(t *testing.T) {
 	}
 }
 
+// Geometries between the rows, solved once more by another program on other meshes
+// (derived; 12.5 µm, flat; 10 µm, the tip a rod's hemispherical end): the estimate's
+// band must hold them.
+func TestCutoffBetweenTheRows(t *testing.T) {
+	for _, row := range []struct{ setback, plate, flat, tip float64 }{
+		{0.25, 0, 0.02282, 0.01052},
+		{0.4, 0, 0.01520, 0.00654},
+		{0.2, 0.1, 0.01650, 0.00770},
+		{0.2, 0.2, 0.01044, 0.00483},
+		{0.5, 0.1, 0.00697, 0.00283},
+		{0.6, 0.2, 0.003332, 0.00129},
+		{0.3, 0.05, 0.01535, 0.00690},
+		{0.3, 0.15, 0.00953, 0.00424},
+	} {
+		flat, err := geometry(0.5, row.setback, row.plate, 10, gun.Tip{Flat: true}).Cutoff()
+		if err != nil {
+			t.Fatal(err)
+		}
+		tip, err := geometry(0.5, row.setback, row.plate, 10, gun.Tip{Radius: 60e-6}).Cutoff()
+		if err != nil {
+			t.Fatal(err)
+		}
+		if !(flat.Low < row.flat && row.flat < flat.High && tip.Low < row.tip && row.tip < tip.High) {
+			t.Errorf("%v: estimates %v and %v", row, flat, tip)
+		}
+		near(t, "estimate", flat.Ratio, row.flat, 0.06)
+	}
+}
+
 // Published biases of 200 to 500 V (University of Nebraska and Portland State, read)
 // must lie within what guns of the table have at 20 kV.
 func TestCutoffBracketsPublishedBias(t *testing.T) {

@@ -86,7 +86,7 @@ func (e Ending) Outlasts(other Ending) bool {
 	if e.Never && other.Never {
 		return magnitude(e.Rest) > magnitude(other.Rest)
 	}
-	return e.Never || !other.Never && e.Time > other.Time
+	return e.Never || !other.Never && !quantity.AtMost(e.Time, other.Time)
 }
 
 // Node is the ending of a named node.

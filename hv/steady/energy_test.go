@@ -114,6 +114,16 @@ func TestFixedBiasIsKeptInAShort(t *testing.T) {
 	near(t, "energy", float64(d.Energy), 1e-9*(25e6-0.09e6)/2, 1e-9)
 }
 
+// With the loads off the tap of a divider hangs on nothing.
+func TestShortOfATap(t *testing.T) {
+	described := supplyOf("negative", 1, 1e-9)
+	described.Divider = dividerOf(1e9, 100e3, 0)
+	c := build(described)
+	if d := must(Short(c, noLoad(c, 1, 1000), "divider.tap")); d.Charge != 0 || d.Energy != 0 {
+		t.Errorf("%+v", d)
+	}
+}
+
 // Voltages scale: charge in proportion, energy as the square.
 func TestShortsScale(t *testing.T) {
 	c := build(supplyOf("positive", 4, 1e-9))

@@ -21,7 +21,8 @@ type Delivered struct {
 // quiet but connected, loads off, a fixed bias kept, diodes without drop. How charge
 // parts among diodes that conduct at once rests on their resistances; these are all
 // the same and small beside every other resistance. Inductors count as connections.
-// A node that stands on ground already delivers nothing.
+// A node on ground already, or on nothing once the loads are off, delivers nothing;
+// else the energy includes what would have run down of itself, as in a bias bypass.
 //
 // Errors: a lack for a doubted capacitance, an unknown node.
 func Short(c *circuit.Circuit, from Voltages, node string) (Delivered, error) {
@@ -99,6 +100,9 @@ func (r *rundown) deliver(group []bool) (Delivered, error) {
 	}
 	for i := range r.valves {
 		bring(&r.valves[i].edge, r.valves[i].charge)
+	}
+	if charge == 0 {
+		return Delivered{Work: r.work}, err
 	}
 	return Delivered{magnitude(quantity.Charge(charge)), quantity.Energy(before - r.energy()), r.work}, err
 }

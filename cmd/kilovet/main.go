@@ -1,0 +1,107 @@
+// Command kilovet reviews a high-voltage supply chain and its insulation before
+// first power-up.
+package main
+
+import (
+	"context"
+	"errors"
+	"fmt"
+	"io"
+	"os"
+
+	"github.com/spf13/cobra"
+	"golang.org/x/term"
+)
+
+func main() {
+	os.Exit(run(world{
+		args: os.Args[1:], in: os.Stdin, out: os.Stdout, err: os.Stderr, env: os.Getenv,
+		columns: func() int { return columns(os.Stdout) },
+	}))
+}
+
+// world is all that the command line touches outside itself, beside files.
+type world struct {
+	args     []string
+	in       io.Reader
+	out, err io.Writer
+	env      func(string) string
+	columns  func() int // of the terminal that out is; 0 where it is none
+}
+
+func columns(out *os.File) int {
+	if !term.IsTerminal(int(out.Fd())) {
+		return 0
+	}
+	width, _, err := term.GetSize(int(out.Fd()))
+	if err != nil {
+		return 80
+	}
+	return width
+}
+
+// The exit statuses.
+const (
+	sound    = 0 // nothing fails and nothing is unassessed among the required concerns
+	unsound  = 1 // something is
+	unusable = 2 // the description or the command line cannot be used
+	files    = 3 // a file could not be read or written
+)
+
+// exit ends a command with a status; its words, if any, go to standard error.
+type exit struct {
+	status int
+	words  string
+}
+
+func (e exit) Error() string { return e.words }
+
+func exitf(status int, format string, args ...any) error {
+	return exit{status, fmt.Sprintf(format, args...)}
+}
+
+// run carries out a command line and gives its exit status. What cobra refuses is a
+// command line that cannot be used.
+func run(w world) int {
+	command := root(w)
+	command.SetArgs(w.args)
+	err := command.ExecuteContext(context.Background())
+	if err == nil {
+		return sound
+	}
+	var e exit
+	if !errors.As(err, &e) {
+		e = exit{unusable, err.Error() + "; see kilovet --help"}
+	}
+	if e.words != "" {
+		fmt.Fprintln(w.err, "kilovet: "+e.words)
+	}
+	return e.status
+}
+
+func root(w world) *cobra.Command {
+	command := &cobra.Command{
+		Use:           "kilovet",
+		Short:         "Reviews a high-voltage supply chain before first power-up",
+		Long:          about,
+		Version:       version(),
+		Args:          cobra.NoArgs,
+		SilenceErrors: true,
+		SilenceUsage:  true,
+		RunE:          func(c *cobra.Command, _ []string) error { return c.Help() },
+	}
+	command.SetVersionTemplate("kilovet {{.Version}}\n")
+	command.SetIn(w.in)
+	command.SetOut(w.out)
+	command.SetErr(w.err)
+	command.AddCommand(reviewCommand(w), basisCommand(w), draftCommand(w))
+	return command
+}
+
+const about = `kilovet reads the description of a high-voltage supply chain, computes what will
+happen when it is switched on, judges that against named rules, and writes a
+review and a sheet to sign.
+
+Exit status: 0 nothing fails and nothing is unassessed; 1 something does; 2 the
+description or the command line cannot be used; 3 a file could not be read or
+written. Local electrical codes and licensed practice come first.`

@@ -1,0 +1,98 @@
+package main
+
+import (
+	"errors"
+	"fmt"
+	"io/fs"
+	"os"
+	"path/filepath"
+	"strings"
+)
+
+// output is a file to be written, already rendered.
+type output struct {
+	path string
+	data []byte
+}
+
+// replaceAll writes the outputs one after the other, each whole; the first that
+// cannot be written ends it, and the message names those that were.
+func replaceAll(outputs []output) error {
+	for i, o := range outputs {
+		if err := o.replace(); err != nil {
+			return exitf(files, "%s cannot be written: %v%s", o.path, plain(err), written(outputs[:i]))
+		}
+	}
+	return nil
+}
+
+func written(outputs []output) string {
+	if len(outputs) == 0 {
+		return "; nothing was written"
+	}
+	var names []string
+	for _, o := range outputs {
+		names = append(names, o.path)
+	}
+	return "; written: " + strings.Join(names, ", ")
+}
+
+// replace puts the data in the place of the file by renaming a new one from the
+// same folder, so that a reader sees the old file or the new one. What is no
+// regular file, such as a device, is written into.
+func (o output) replace() error {
+	path := o.path
+	if target, err := filepath.EvalSymlinks(path); err == nil {
+		path = target
+	}
+	mode := fs.FileMode(0o666)
+	if info, err := os.Stat(path); err == nil {
+		switch {
+		case info.IsDir():
+			return errors.New("it is a folder")
+		case !info.Mode().IsRegular():
+			return os.WriteFile(path, o.data, mode)
+		}
+		mode = info.Mode().Perm()
+	}
+	part, err := create(path, mode)
+	if err != nil {
+		return err
+	}
+	if err := fill(part, o.data); err != nil {
+		return errors.Join(err, os.Remove(part.Name()))
+	}
+	if err := os.Rename(part.Name(), path); err != nil {
+		return errors.Join(err, os.Remove(part.Name()))
+	}
+	return nil
+}
+
+// create makes a new file beside the one to be replaced.
+func create(path string, mode fs.FileMode) (*os.File, error) {
+	dir, base := filepath.Split(path)
+	for n := 1; ; n++ {
+		file, err := os.OpenFile(filepath.Join(dir, fmt.Sprintf(".%s.%d.part", base, n)), os.O_WRONLY|os.O_CREATE|os.O_EXCL, mode)
+		if !errors.Is(err, fs.ErrExist) || n == 100 {
+			return file, err
+		}
+	}
+}
+
+func fill(file *os.File, data []byte) error {
+	_, err := file.Write(data)
+	return errors.Join(err, file.Sync(), file.Close())
+}
+
+// same reports whether two paths are one file.
+func same(p, q string) bool {
+	if filepath.Clean(p) == filepath.Clean(q) {
+		return true
+	}
+	a, err := os.Stat(p)
+	if err != nil {
+		return false
+	}
+	b, err := os.Stat(q)
+	return err == nil && a.Mode().IsRegular() && os.SameFile(a, b)
+}

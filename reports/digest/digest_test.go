@@ -134,10 +134,10 @@ func TestAmounts(t *testing.T) {
 		unit  string
 		want  string
 	}{
-		{-19612.4, "V", "−19.61 kV"},
-		{4.7e6, "ohm", "4.7 MΩ"},
+		{-19612.4, "V", "-19.61 kV"},
+		{4.7e6, "ohm", "4.7 Mohm"},
 		{0.125, "m", "125 mm"},
-		{3e-8, "m2", "0.03 mm²"},
+		{3e-8, "m2", "0.03 mm2"},
 		{0.0213, "1", "2.13 %"},
 		{1010.1, "1", "1010"},
 		{1, "1", "1"},
@@ -159,7 +159,7 @@ func TestMargins(t *testing.T) {
 		margin float64
 		want   string
 	}{
-		{-0.12, "−12.0 %"}, {0.153, "+15.3 %"}, {0, "0.0 %"}, {-1e-6, "−0.0001 %"}, {1e-6, "+0.0001 %"}, {math.Inf(1), "more than a hundredfold"}, {150, "more than a hundredfold"}, {math.NaN(), ""},
+		{-0.12, "-12.0 %"}, {0.153, "+15.3 %"}, {0, "0.0 %"}, {-1e-6, "-0.0001 %"}, {1e-6, "+0.0001 %"}, {math.Inf(1), "more than a hundredfold"}, {150, "more than a hundredfold"}, {math.NaN(), ""},
 	} {
 		if got := digest.Margin(rule.Finding{Margin: &c.margin}); got != c.want {
 			t.Errorf("margin %g reads %q, want %q", c.margin, got, c.want)

@@ -11,8 +11,6 @@ import (
 	"kilovet/rules/rule"
 )
 
-var signs = strings.NewReplacer("ohm", "Ω", "mm2", "mm²", "m2K2", "m²K²", "m2", "m²", "m3", "m³", "-", "−")
-
 // Amount writes an amount for people: four significant digits, usual prefix. Pure
 // numbers below one are shown as fractions; what is not finite is said to be no
 // number.
@@ -23,9 +21,9 @@ func Amount(a rule.Amount) string {
 	case a.Value == 0:
 		a.Value = 0 // a negative nought is a nought
 	case a.Unit == "1" && math.Abs(a.Value) >= 1:
-		return signs.Replace(quantity.Significant(a.Value))
+		return quantity.Significant(a.Value)
 	}
-	return signs.Replace(a.Text())
+	return a.Text()
 }
 
 // Needed says what a finding needs, as in "at least 125 mm"; empty for a rule of
@@ -68,9 +66,9 @@ func Margin(f rule.Finding) string {
 // reads as nought.
 func percent(v float64) string {
 	if v != 0 && math.Abs(v) < 0.0005 {
-		return strings.Replace(fmt.Sprintf("%.1g %%", v*100), "-", "−", 1)
+		return fmt.Sprintf("%.1g %%", v*100)
 	}
-	return strings.Replace(strconv.FormatFloat(v*100, 'f', 1, 64)+" %", "-", "−", 1)
+	return strconv.FormatFloat(v*100, 'f', 1, 64) + " %"
 }
 
 // Source writes a source with its mark, and whether it judged.
@@ -101,6 +99,14 @@ func Place(r *rules.Review, f rule.Finding) string {
 		return f.Place.Key
 	}
 	return fmt.Sprintf("%s at %s:%d:%d", f.Place.Key, description(r), f.Place.Line, f.Place.Column)
+}
+
+// Line is Place without the file, for where the file is named once for all.
+func Line(f rule.Finding) string {
+	if f.Place.Key == "" || f.Place.Line == 0 {
+		return f.Place.Key
+	}
+	return fmt.Sprintf("%s, line %d", f.Place.Key, f.Place.Line)
 }
 
 func description(r *rules.Review) string {

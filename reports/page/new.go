@@ -96,12 +96,12 @@ func findings(r *rules.Review) []Section {
 	if len(r.Findings) == 0 {
 		return nil
 	}
-	t := Table{Columns: []Column{{Title: "Verdict", Share: 0.15}, {Title: "Rule and subject", Share: 0.21}, {Title: "Amounts", Share: 0.22}, {Title: "Reason, remedy, sources", Share: 0.42}}}
+	t := Table{Columns: []Column{{Title: "Verdict", Share: 0.13}, {Title: "Rule and subject", Share: 0.24}, {Title: "Amounts", Share: 0.22}, {Title: "Reason, remedy, sources", Share: 0.41}}}
 	for _, f := range digest.Sorted(r.Findings) {
 		t.Rows = append(t.Rows, Row{Cells: []Cell{
 			{Verdict: f.Verdict},
-			lines(strong(f.Rule), plain(f.Subject), small("concerns "+string(f.Concern)), small(digest.Place(r, f))),
-			lines(labelled("needed", digest.Needed(f)), labelled("provided", digest.Provided(f)), labelled("margin", digest.Margin(f)), labelled("under", f.Under)),
+			lines(strong(f.Rule), plain(f.Subject), small("concerns "+string(f.Concern)), small(digest.Line(f))),
+			lines(labelled("needed", digest.Needed(f)), labelled("provided", digest.Provided(f)), labelled("margin", digest.Margin(f)), labelledSmall("under", f.Under)),
 			reasons(f),
 		}})
 	}

@@ -62,10 +62,11 @@ type Column struct {
 	Right bool // numbers stand to the right
 }
 
-// Row is one row; a group row has one cell over all columns and stays with the
-// row after it.
+// Row is one row. A group row has one cell over all columns, stays with the row
+// after it, and stands again over the rows under it that go on to another sheet.
 type Row struct {
 	Group bool
+	Under bool // belongs to the group row before it
 	Cells []Cell
 }
 

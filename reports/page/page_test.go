@@ -38,7 +38,7 @@ func piece(b *strings.Builder, block page.Block) {
 	}
 	fmt.Fprintf(b, "  Table %+v\n", t.Columns)
 	for _, r := range t.Rows {
-		fmt.Fprintf(b, "    row group %t\n", r.Group)
+		fmt.Fprintf(b, "    row group %t under %t\n", r.Group, r.Under)
 		for _, c := range r.Cells {
 			fmt.Fprintf(b, "      | %s", c.Verdict)
 			for _, l := range c.Lines {

@@ -33,7 +33,9 @@ func figureTable(groups []digest.Group, columns []string) Table {
 		}
 		t.Rows = append(t.Rows, Row{Group: true, Cells: []Cell{lines(strong(g.ID), plain(g.What), labelledSmall("basis:", g.Basis))}})
 		for _, row := range g.Rows {
-			t.Rows = append(t.Rows, valueRow(row, plain(row.Subject)))
+			under := valueRow(row, plain(row.Subject))
+			under.Under = true
+			t.Rows = append(t.Rows, under)
 		}
 	}
 	return t

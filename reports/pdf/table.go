@@ -22,6 +22,9 @@ func (w *flow) table(t page.Table) {
 	w.y += 1
 }
 
+// headHeight is the most that the titles of the columns take.
+const headHeight = 9.0
+
 // head is the titles of the columns between two lines.
 func (w *flow) head(columns []page.Column) {
 	w.sheet().add(stroke{left, w.y, right, w.y, 0.35, 0})
@@ -35,11 +38,21 @@ func (w *flow) head(columns []page.Column) {
 	w.sheet().add(stroke{left, w.y, right, w.y, 0.2, 0})
 }
 
+// tableRows sets the rows; one that goes on to another sheet has the titles, and
+// its group, above it again.
 func (w *flow) tableRows(t page.Table, head func()) []row {
 	var rows []row
+	var group row
 	for i, r := range t.Rows {
-		next := i+1 < len(t.Rows) && !t.Rows[i+1].Group
-		rows = append(rows, row{cells: w.tableCells(t.Columns, r), pad: 0.9, ruled: !r.Group || !next, again: head, group: r.Group})
+		alone := i+1 == len(t.Rows) || !t.Rows[i+1].Under
+		set := row{cells: w.tableCells(t.Columns, r), pad: 0.7, ruled: !r.Group || alone, again: head, group: r.Group}
+		if r.Group {
+			group = set
+		}
+		if above := group; r.Under && above.height() <= keep-headHeight {
+			set.again = func() { head(); w.place(above) }
+		}
+		rows = append(rows, set)
 	}
 	return rows
 }

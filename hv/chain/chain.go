@@ -7,7 +7,7 @@
 //	words    the accepted words, separated by " | "
 //	list     "2" (exactly two), "one or many" (a single value counts as a list), "many"
 //	means    what it is, in a clause
-//	example  as it would stand in a file
+//	example  as it would stand in a file; a list of tables with one is drafted in braces
 //	needed   "yes" where the table makes no sense without it
 package chain
 

@@ -185,8 +185,12 @@ func checkTargets(s *survey) {
 	var names []string
 	known := map[string]bool{}
 	for i := range s.Targets {
-		names = append(names, s.Targets[i].Name.V)
-		known[s.Targets[i].Name.V] = true
+		name := s.Targets[i].Name
+		if !s.sound(name.Place) {
+			return // it may be the one that a shield names
+		}
+		names = append(names, name.V)
+		known[name.V] = true
 	}
 	for i := range s.Shields {
 		t := s.Shields[i].Target

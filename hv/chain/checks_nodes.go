@@ -50,9 +50,15 @@ func (s *survey) eachNode(list document.Given[[]string]) {
 // node reports a name that is no node. Without a multiplier there are hardly any,
 // and what needs them is reported apart.
 func (s *survey) node(name document.Given[string]) {
-	if s.sound(name.Place) && !s.nodes[name.V] && s.Multiplier != nil {
+	if s.sound(name.Place) && !s.nodes[name.V] && s.Multiplier != nil && !s.uncounted(name.V) {
 		s.fault(name.Place, quoted(name.V)+" is no node of this chain", oneOf("node", "", name.V, s.listed))
 	}
+}
+
+// uncounted reports whether a name is that of a stage, and the number of stages unknown.
+func (s *survey) uncounted(name string) bool {
+	family, _, _ := strings.Cut(name, ".")
+	return (family == "stage" || family == "coupling") && !s.sound(s.Multiplier.Stages.Place)
 }
 
 // newNodes judges the names that loose parts give to new nodes: none may pass for
@@ -72,7 +78,7 @@ func (s *survey) newNodes() {
 			switch {
 			case ok && strings.EqualFold(near, end.V):
 				s.fault(end.Place, quoted(end.V)+" differs by upper and lower case only from a node", "write "+quoted(near))
-			case reserved(end.V):
+			case reserved(end.V) && (s.Multiplier == nil || !s.uncounted(end.V)):
 				s.fault(end.Place, quoted(end.V)+" is no node of this chain, and the name is kept for one", oneOf("node", "", end.V, fixed))
 			}
 		}

@@ -85,7 +85,7 @@ type Shield struct {
 	document.Table
 	Name     document.Given[string]          `key:"name" needed:"yes" means:"name of the wall, port or window" example:"column wall"`
 	Target   document.Given[string]          `key:"target" needed:"yes" means:"name of the target behind it" example:"anode"`
-	Layers   []Layer                         `key:"layers" needed:"yes" means:"what the radiation passes"`
+	Layers   []Layer                         `key:"layers" needed:"yes" means:"what the radiation passes" example:"[{ material = \"stainless steel\", thickness = \"3 mm\" }]"`
 	Distance document.Given[quantity.Length] `key:"distance" range:"> 0 mm, <= 100 m" means:"from the stop to the outer surface" example:"120 mm"`
 }
 
@@ -100,7 +100,7 @@ type Layer struct {
 type Spacing struct {
 	document.Table
 	Name          document.Given[string]               `key:"name" needed:"yes" means:"name of the spacing" example:"gun feedthrough, air side"`
-	From          document.Given[string]               `key:"from" means:"node on one side" example:"cathode"`
+	From          document.Given[string]               `key:"from" means:"node on one side" example:"output"`
 	To            document.Given[string]               `key:"to" means:"node on the other side" example:"ground"`
 	Also          document.Given[[]string]             `key:"also" list:"many" means:"further nodes it holds for, of no higher voltage" example:"[\"stage.4\"]"`
 	Voltage       document.Given[quantity.Voltage]     `key:"voltage" range:"> 0 V, <= 1 MV" means:"DC or peak voltage, in place of from and to" example:"20 kV"`
@@ -148,7 +148,7 @@ type Electrode struct {
 	Name    document.Given[string]           `key:"name" needed:"yes" means:"name; several pieces may bear the same" example:"pin"`
 	Node    document.Given[string]           `key:"node" means:"node whose potential it has" example:"cathode"`
 	Voltage document.Given[quantity.Voltage] `key:"voltage" range:">= -1 MV, <= 1 MV" means:"fixed potential, in place of a node" example:"0 V"`
-	Profile []Stroke                         `key:"profile" needed:"yes" means:"outline in r and z"`
+	Profile []Stroke                         `key:"profile" needed:"yes" means:"outline in r and z" example:"[{ from = [\"0 mm\", \"5 mm\"] }, { to = [\"12 mm\", \"5 mm\"] }, { to = [\"15 mm\", \"8 mm\"], centre = [\"12 mm\", \"8 mm\"], turn = \"left\" }]"`
 }
 
 // Dielectric is an insulating body with a closed profile.
@@ -157,14 +157,14 @@ type Dielectric struct {
 	Name         document.Given[string]               `key:"name" needed:"yes" means:"name of the body" example:"sleeve"`
 	Permittivity document.Given[float64]              `key:"permittivity" range:">= 1, <= 100000" needed:"yes" means:"relative permittivity" example:"9.4"`
 	Resistivity  document.Given[quantity.Resistivity] `key:"resistivity" range:"> 0 ohm m, <= 1e25 ohm m" means:"resistivity" example:"1e12 ohm m"`
-	Profile      []Stroke                             `key:"profile" needed:"yes" means:"closed outline in r and z"`
+	Profile      []Stroke                             `key:"profile" needed:"yes" means:"closed outline in r and z" example:"[{ from = [\"20 mm\", \"0 mm\"] }, { to = [\"30 mm\", \"0 mm\"] }, { to = [\"30 mm\", \"10 mm\"] }, { to = [\"20 mm\", \"0 mm\"] }]"`
 }
 
 // Boundary is where the model ends.
 type Boundary struct {
 	document.Table
 	Kind    document.Given[string] `key:"kind" words:"earth | natural" needed:"yes" means:"earthed wall, or symmetry and end of the model" example:"natural"`
-	Profile []Stroke               `key:"profile" needed:"yes" means:"line in r and z"`
+	Profile []Stroke               `key:"profile" needed:"yes" means:"line in r and z" example:"[{ from = [\"0 mm\", \"20 mm\"] }, { to = [\"40 mm\", \"20 mm\"] }]"`
 }
 
 // Stroke is the start of a profile, or a line or arc to its next point.

@@ -37,22 +37,13 @@ func (b *binder) table(n *node, into reflect.Value, path string) {
 		d.Path = join(path, d.Key)
 		child := n.children[d.Key]
 		if child == nil {
-			child = d.presumed(misspelt[d.Key])
+			child = misspelt[d.Key]
 		}
 		if child == nil && d.Needed && !n.partial {
 			b.missing(n, d)
 		}
 		b.field(child, d, into.Field(d.index))
 	}
-}
-
-// presumed is what stands at a misspelt key that was probably meant to be this one:
-// a table is read as if it were, a value only counts as given.
-func (d Declared) presumed(n *node) *node {
-	if n == nil || d.kind != nil && (n.kind == table || n.kind == tables) {
-		return n
-	}
-	return &node{kind: illegible, place: n.place}
 }
 
 // field fills one field; without a node it notes the keys of leaves only.
@@ -152,10 +143,19 @@ func (b *binder) unknowns(n *node, path string, declared []Declared) map[string]
 			if misspelt == nil {
 				misspelt = map[string]*node{}
 			}
-			misspelt[near] = n.children[name]
+			misspelt[near] = n.children[name].presumed(n.keys[name])
 		}
 	}
 	return misspelt
+}
+
+// presumed is what stands at a misspelt key, for the key that was probably meant: a
+// table is read as if it stood there, a value only counts as given.
+func (n *node) presumed(key Place) *node {
+	if n.kind == table || n.kind == tables {
+		return n
+	}
+	return &node{kind: illegible, place: key}
 }
 
 // unknown reports a key that is not declared and returns the one that was probably meant.

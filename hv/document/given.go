@@ -49,3 +49,23 @@ func (g *Given[T]) slot() (reflect.Value, *Place) { return reflect.ValueOf(&g.V)
 // Table is embedded in every struct that a table of the description fills; its
 // place is that of the table's header or opening brace.
 type Table struct{ Place }
+
+// Leaf is any Given.
+type Leaf interface {
+	Set() bool
+	Here() Place
+}
+
+// Need is nil where all leaves were given, else a lack that names those that were not.
+func Need(leaves ...Leaf) error {
+	var keys []string
+	for _, l := range leaves {
+		if !l.Set() {
+			keys = append(keys, l.Here().Key)
+		}
+	}
+	if keys == nil {
+		return nil
+	}
+	return lack.Key(keys...)
+}

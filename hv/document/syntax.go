@@ -42,18 +42,14 @@ func (u *unreadable) repeated() ([]string, bool) {
 	return []string{m[1]}, true
 }
 
-// decode hands one statement to the TOML library. Its panics, which some garbled
-// texts provoke, are errors like any other.
-func (st statement) decode(whole string) (d *decoded, bad *unreadable) {
+// decode hands statements to the TOML library. Its panics, which some garbled texts
+// provoke, are errors like any other.
+func decode(text string) (d *decoded, bad *unreadable) {
 	defer func() {
 		if p := recover(); p != nil {
 			d, bad = nil, &unreadable{message: "not TOML"}
 		}
 	}()
-	text := whole[st.start:st.end]
-	if st.broken {
-		return nil, &unreadable{message: "not closed"}
-	}
 	if strings.HasPrefix(text, byteOrderMark) { // the library would pass over it
 		return nil, &unreadable{message: "a byte order mark"}
 	}

@@ -2,6 +2,7 @@ package document
 
 import (
 	"fmt"
+	"slices"
 	"strings"
 )
 
@@ -54,10 +55,37 @@ type grower struct {
 func grow(text string) (*node, Faults) {
 	root := &node{kind: table, place: Place{Line: 1, Column: 1}}
 	g := &grower{text: text, cursor: newCursor(text), root: root, context: root}
-	for _, st := range scan(text) {
-		g.statement(st)
+	for all := scan(text); len(all) > 0; {
+		n := max(1, keysAhead(all))
+		g.run(all[:n])
+		all = all[n:]
 	}
 	return root, g.faults
+}
+
+// keysAhead counts the keys before the next header or the next statement that is no TOML.
+func keysAhead(all []statement) int {
+	n := slices.IndexFunc(all, func(st statement) bool { return st.kind != pair || st.deep || st.broken })
+	if n < 0 {
+		return len(all)
+	}
+	return n
+}
+
+// run reads statements that follow each other: keys at one go where that succeeds,
+// which is several times faster, else each by itself.
+func (g *grower) run(all []statement) {
+	if len(all) > 1 {
+		if d, bad := decode(g.text[all[0].start:all[len(all)-1].end]); bad == nil {
+			for _, st := range all {
+				g.pair(g.context, st.entry, 0, d, d.values)
+			}
+			return
+		}
+	}
+	for _, st := range all {
+		g.statement(st)
+	}
 }
 
 func (g *grower) fault(code Code, at Place, path []string, what, remedy string) {
@@ -65,13 +93,17 @@ func (g *grower) fault(code Code, at Place, path []string, what, remedy string) 
 }
 
 func (g *grower) statement(st statement) {
-	if st.deep {
+	switch {
+	case st.deep:
 		start := g.cursor.at(st.start)
 		g.fault(Nesting, start, nil, "nested too deeply", fmt.Sprintf("at most %d tables or lists within each other", deepest))
 		g.unread(st, start)
 		return
+	case st.broken:
+		g.unread(st, g.syntax(st, &unreadable{}))
+		return
 	}
-	d, bad := st.decode(g.text)
+	d, bad := decode(g.text[st.start:st.end])
 	switch {
 	case bad != nil:
 		g.unread(st, g.syntax(st, bad))

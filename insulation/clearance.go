@@ -19,7 +19,8 @@ const scope quantity.Voltage = 1500
 // the gap, IEC 61010-1 K.11 or K.12 in a secondary circuit behind a mains of category 3
 // or 4, IPC-2221 on a printed board, times the altitude factor, and not under the floor of
 // the pollution degree. Reinforced insulation is dimensioned for 160 % of the peak and
-// the next impulse step; functional insulation as basic.
+// the next impulse step; functional insulation as basic, and past the last row of
+// Table F.8 by needle gaps. Above 30 kHz the factor of IEC 60664-4 is added.
 //
 // Case A holds unless the gap was impulse tested. Past the last row of a table, without
 // pollution degree or altitude, and in other gases there is a lack.
@@ -38,7 +39,7 @@ func ClearanceNeeded(g gap.Gap, v gap.Voltages) (gap.Answer[quantity.Length], er
 		return none, err
 	}
 	for i := range asked {
-		asked[i].raise(factor)
+		asked[i].raise(factor, "the altitude")
 	}
 	floor, err := table.PollutionFloor(degreeOn(g), g.Medium == gap.PrintedBoard)
 	if err != nil {
@@ -47,6 +48,7 @@ func ClearanceNeeded(g gap.Gap, v gap.Voltages) (gap.Answer[quantity.Length], er
 	a := largest(append(asked, demand{Reading: floor, why: pollution}))
 	a.Assumptions = append(a.Assumptions, field.assumptions...)
 	a.Because += field.remark
+	a.Shown = append(a.Shown, compared(g, v)...)
 	return a, nil
 }
 
@@ -56,15 +58,16 @@ const pollution = "pollution"
 // demand is what one table asks for.
 type demand struct {
 	table.Reading[quantity.Length]
-	why   string
-	extra []gap.Source // of factors
+	why     string
+	extra   []gap.Source // of factors
+	assumed []string
 }
 
-// raise multiplies a demand by the altitude factor.
-func (d *demand) raise(factor table.Reading[quantity.Fraction]) {
+// raise multiplies a demand by a factor above 1.
+func (d *demand) raise(factor table.Reading[quantity.Fraction], what string) {
 	if factor.Value > 1 {
 		d.Value *= quantity.Length(factor.Value)
-		d.why += fmt.Sprintf(", times %.3g for the altitude", float64(factor.Value))
+		d.why += fmt.Sprintf(", times %.4g for %s", float64(factor.Value), what)
 		d.extra = append(d.extra, factor.Source)
 	}
 }
@@ -85,6 +88,8 @@ func largest(asked []demand) gap.Answer[quantity.Length] {
 		Value:   first.Value,
 		Because: fmt.Sprintf("%s: %s, %s", first.why, first.Source.Text, first.Rows),
 		Sources: append([]gap.Source{first.Source.Governing()}, first.extra...),
+
+		Assumptions: first.assumed,
 	}
 	if first.Note != "" {
 		a.Because += "; " + first.Note
@@ -103,6 +108,11 @@ func electrical(g gap.Gap, v gap.Voltages, field table.Case) ([]demand, error) {
 	if err != nil {
 		return nil, err
 	}
+	factor, err := frequencyFactor(g, v, steady.Value)
+	if err != nil {
+		return nil, err
+	}
+	steady.raise(factor, "the frequency")
 	asked := []demand{steady}
 	impulse, err := impulseDemand(g, v, field)
 	if err != nil {
@@ -127,6 +137,9 @@ func safetyStep(g gap.Gap) quantity.Voltage {
 }
 
 func steadyDemand(g gap.Gap, peak quantity.Voltage, field table.Case) (demand, error) {
+	if column := table.SteadyClearance(field); g.Class() == gap.Functional && field == table.CaseA && peak > column.Last() {
+		return functionalDemand(peak)
+	}
 	step := safetyStep(g)
 	r, err := table.SteadyClearance(field).At(peak * step)
 	d := demand{Reading: r, why: quantity.Text(peak) + " peak"}
@@ -194,6 +207,21 @@ func secondaryDemand(g gap.Gap, peak quantity.Voltage) []demand {
 		d.Value, d.why = 2*d.Value, "reinforced, twice "+d.why // IEC 61010-1 K.3
 	}
 	return []demand{d}
+}
+
+// compared are what other standards ask for, shown and not judged.
+func compared(g gap.Gap, v gap.Voltages) []gap.Beside[quantity.Length] {
+	var shown []gap.Beside[quantity.Length]
+	if g.Medium == gap.PrintedBoard {
+		r := table.ConverterSpacing(v.Peak)
+		shown = append(shown, gap.Beside[quantity.Length]{Value: r.Value, Source: r.Source})
+	}
+	if impulse, _, err := ratedImpulse(g, v); err == nil && impulse > 0 {
+		if r, err := table.CombinedClearance(v.Peak, impulse); err == nil {
+			shown = append(shown, gap.Beside[quantity.Length]{Value: r.Value, Source: r.Source})
+		}
+	}
+	return shown
 }
 
 // altitudeFactor is that of the pressure where it is given, else of the altitude.

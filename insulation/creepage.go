@@ -33,6 +33,7 @@ func CreepageNeeded(g gap.Gap, v gap.Voltages) (gap.Answer[quantity.Length], err
 		return none, err
 	}
 	a.Sources = append(a.Sources, source)
+	a.Assumptions = append(a.Assumptions, slowCreepage(v)...)
 	switch {
 	case noClearance != nil:
 		a.Assumptions = append(a.Assumptions, "the creepage is not under the clearance, which is not known: "+noClearance.Error())
@@ -95,4 +96,38 @@ func degreeOn(g gap.Gap) int {
 		return 1
 	}
 	return g.PollutionDegree
+}
+
+// GrooveWidth is the width X under which a groove in the surface counts as bridged and
+// adds nothing to the creepage (IEC 60664-1, IEC 61010-1 Table C.1).
+func GrooveWidth(g gap.Gap, v gap.Voltages) (gap.Answer[quantity.Length], error) {
+	clearance, err := ClearanceNeeded(g, v)
+	if err != nil {
+		return gap.Answer[quantity.Length]{}, err
+	}
+	r, err := table.GrooveWidth(degreeOn(g), clearance.Value)
+	return gap.Answer[quantity.Length]{
+		Value: r.Value, Because: "narrower grooves count as bridged, " + r.Rows, Sources: []gap.Source{r.Source.Governing()},
+	}, err
+}
+
+// DischargeFreeClearance is the clearance at which sharp electrodes are free of partial
+// discharge (IEC 60664-1 Table F.9), with the altitude factor. Past 12 kV there is a
+// lack: a radius is needed, not a distance.
+func DischargeFreeClearance(g gap.Gap, v gap.Voltages) (gap.Answer[quantity.Length], error) {
+	var none gap.Answer[quantity.Length]
+	if err := inAir(g); err != nil {
+		return none, err
+	}
+	factor, err := altitudeFactor(g)
+	if err != nil {
+		return none, err
+	}
+	r, err := table.DischargeFreeClearance(v.Peak)
+	if err != nil {
+		return none, err
+	}
+	d := demand{Reading: r, why: quantity.Text(v.Peak) + " peak without discharge"}
+	d.raise(factor, "the altitude")
+	return largest([]demand{d}), nil
 }

@@ -8,6 +8,7 @@ import (
 	"kilovet/insulation/gap"
 	"kilovet/insulation/gas"
 	"kilovet/insulation/shape"
+	"kilovet/insulation/table"
 )
 
 // FieldPeak is the highest field of the shape at the peak voltage, exact for the ideal
@@ -88,7 +89,18 @@ func onset(g gap.Gap, s gas.State, l shape.Line) (gap.Answer[quantity.Voltage], 
 	if peek, err := gas.PeekOnset(s, g.Shape.Kind, l); err == nil {
 		a.Shown = append(a.Shown, peek...)
 	}
+	if r, err := measuringGap(g, s); err == nil {
+		a.Shown = append(a.Shown, gap.Beside[quantity.Voltage]{Value: r.Value, Source: r.Source})
+	}
 	return a, nil
+}
+
+// measuringGap is what IEC 60052 says of a sphere gap of its sizes, one sphere earthed.
+func measuringGap(g gap.Gap, s gas.State) (table.Reading[quantity.Voltage], error) {
+	if g.Shape.Kind != gap.SphereSphere || g.Shape.Symmetric || s.Gas != gap.AirGas {
+		return table.Reading[quantity.Voltage]{}, lack.Range("no measuring gap")
+	}
+	return gas.SphereGap(s, 2*g.Shape.Radius, g.Clearance)
 }
 
 // Breakdown is the peak or DC voltage that a gap in a gas breaks down at. Between

@@ -41,7 +41,7 @@ func Onset(s State, l shape.Line, surface gap.Surface) (gap.Answer[quantity.Volt
 	if s.Gas == gap.AirGas {
 		a.Shown = besides(l, s.Density(), m)
 	}
-	return a, nil
+	return ofUniform.applied(s, a), nil
 }
 
 // besides is the onset by the other ionisation coefficient of air, where its fit holds.

@@ -40,18 +40,18 @@ const (
 // last row, 547 mm, there is a lack. Alternating voltage was used, so each needle was
 // the positive one in turn.
 func Needles(s State, d quantity.Length) (gap.Answer[quantity.Voltage], error) {
+	if d < shortestGap {
+		return gap.Answer[quantity.Voltage]{}, lack.Range("gaps under 10 µm break down by field emission, asked for %s", quantity.Text(d))
+	}
 	density := s.density25()
 	a, err := normalNeedles(d * quantity.Length(min(1, density/thinnest)))
 	a.Value *= quantity.Voltage(min(max(density, thinnest), densest))
-	return a, err
+	return ofSharp.applied(s, a), err
 }
 
 // normalNeedles is Needles at 25 °C and 760 Torr.
 func normalNeedles(d quantity.Length) (gap.Answer[quantity.Voltage], error) {
 	var none gap.Answer[quantity.Voltage]
-	if d < shortestGap {
-		return none, lack.Range("gaps under 10 µm break down by field emission, asked for %s", quantity.Text(d))
-	}
 	first := needles.First()
 	r, err := needles.At(max(d, first))
 	if err != nil {
@@ -108,7 +108,7 @@ func PointPlane(s State, d quantity.Length) (gap.Answer[quantity.Voltage], error
 		a.Value, a.Because = quantity.Voltage(crossing), "positive streamers cross the gap at a mean of 4.5 kV/cm"
 		a.Sources = []gap.Source{{Text: "least field of positive streamers, Lehtinen and Østgaard", Mark: gap.Read, Governs: true}}
 	}
-	return a, nil
+	return ofSharp.applied(s, a), nil
 }
 
 // tableDensity is that of air at 80 kPa and 20 °C, for which the clearances hold.

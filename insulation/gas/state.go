@@ -26,7 +26,7 @@ type State struct {
 	Gas         gap.Gas
 	Pressure    quantity.Pressure
 	Temperature quantity.Temperature
-	Humidity    *quantity.Humidity // absolute, air only; nil: as the data were taken
+	Humidity    *quantity.Humidity // absolute, air only; nil: as the data were taken, 8.5 or 11 g/m³
 }
 
 // Density is relative to 20 °C and 101.325 kPa: δ = (p/p₀)(T₀/T).

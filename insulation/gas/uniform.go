@@ -75,12 +75,14 @@ var uniformSource = gap.Source{Text: "uniform-field law 24.22 x + 6.08 √x, Nai
 func uniformAir(s State, d quantity.Length) (gap.Answer[quantity.Voltage], error) {
 	if x := quantity.Length(s.Density()) * d; quantity.AtLeast(x, shortestUniform) {
 		v, err := UniformAir(s.Density(), d)
-		return gap.Answer[quantity.Voltage]{
+		return ofUniform.applied(s, gap.Answer[quantity.Voltage]{
 			Value: v, Because: "breakdown of air in a uniform field", Sources: []gap.Source{uniformSource.Governing()},
-		}, err
+		}), err
 	}
 	a, err := paschenAnswer(gap.AirGas, s.reduced(d))
-	a.Value = min(a.Value, uniformLaw(shortestUniform)) // the two laws meet within 2 % here
+	if law := ofUniform.applied(s, gap.Answer[quantity.Voltage]{Value: uniformLaw(shortestUniform)}); err == nil {
+		a.Value = min(a.Value, law.Value) // the two laws meet within 2 % here
+	}
 	return a, err
 }
 

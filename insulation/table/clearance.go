@@ -20,6 +20,7 @@ const (
 	CaseB
 )
 
+// String is how the standard calls the case.
 func (c Case) String() string {
 	if c == CaseB {
 		return "case B"

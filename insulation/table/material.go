@@ -20,6 +20,7 @@ const (
 	GroupIIIb
 )
 
+// String is the group in words.
 func (g Group) String() string {
 	return [...]string{"no tracking", "material group I", "material group II", "material group IIIa", "material group IIIb"}[g]
 }

@@ -17,7 +17,8 @@ import (
 
 func TestMain(m *testing.M) { testscript.Main(m, map[string]func(){"kilovet": main}) }
 
-// Every script finds the built-in description as column.toml in its folder.
+// Every script finds two descriptions in its folder: the built-in one as
+// column.toml and, where any will do, a single spacing as gap.toml.
 func TestScripts(t *testing.T) {
 	testscript.Run(t, testscript.Params{
 		Dir:                 "testdata/script",
@@ -25,8 +26,10 @@ func TestScripts(t *testing.T) {
 		RequireUniqueNames:  true,
 		Cmds:                map[string]func(*testscript.TestScript, bool, []string){"status": status, "replace": replace, "valid": valid, "same": identical},
 		Setup: func(e *testscript.Env) error {
-			_, data := kilovet.Example()
-			return os.WriteFile(filepath.Join(e.WorkDir, "column.toml"), data, 0o644)
+			_, column := kilovet.Example()
+			gap, err := os.ReadFile("testdata/gap.toml")
+			return errors.Join(err, os.WriteFile(filepath.Join(e.WorkDir, "column.toml"), column, 0o644),
+				os.WriteFile(filepath.Join(e.WorkDir, "gap.toml"), gap, 0o644))
 		},
 	})
 }

@@ -161,5 +161,5 @@ type Part struct {
 	Resistance        document.Given[quantity.Resistance]  `key:"resistance" range:">= 0 ohm, <= 1000 Tohm" means:"diode: on-resistance; meter: input resistance" example:"40 ohm"`
 	Capacitance       document.Given[quantity.Capacitance] `key:"capacitance" range:">= 0 F, <= 1 F" means:"diode: junction capacitance" example:"1 pF"`
 	Leakage           document.Given[quantity.Current]     `key:"leakage" range:">= 0 A, <= 1 A" means:"diode: leakage at the rated voltage" example:"100 nA"`
-	Permanent         document.Given[bool]                 `key:"permanent" means:"stays connected when all is off (default: true)" example:"true"`
+	Permanent         document.Given[bool]                 `key:"permanent" means:"stays connected when all is off (default: only where neither end is ground)" example:"true"`
 }

@@ -4,6 +4,7 @@ import (
 	"math"
 	"math/cmplx"
 
+	"kilovet/hv/document"
 	"kilovet/hv/lack"
 	"kilovet/hv/quantity"
 	"kilovet/ripple/beam"
@@ -54,20 +55,8 @@ func (e *Evidence) Spot() (beam.Spot, error) {
 
 func (e *Evidence) optics() (beam.Optics, error) {
 	b := e.chain.Beam
-	var missing []string
-	for _, key := range []struct {
-		name string
-		set  bool
-	}{
-		{b.ChromaticAberration.Key, b.ChromaticAberration.Set()}, {b.SphericalAberration.Key, b.SphericalAberration.Set()},
-		{b.HalfAngle.Key, b.HalfAngle.Set()}, {b.SourceImage.Key, b.SourceImage.Set()},
-	} {
-		if !key.set {
-			missing = append(missing, key.name)
-		}
-	}
-	if missing != nil {
-		return beam.Optics{}, lack.Key(missing...)
+	if err := document.Need(b.ChromaticAberration, b.SphericalAberration, b.HalfAngle, b.SourceImage); err != nil {
+		return beam.Optics{}, err
 	}
 	return beam.Optics{Chromatic: b.ChromaticAberration.V, Spherical: b.SphericalAberration.V, Angle: b.HalfAngle.V, SourceImage: b.SourceImage.V}, nil
 }
@@ -102,6 +91,10 @@ func (e *Evidence) disturbing() (blurring, banding []beam.Line, err error) {
 
 // disturbances are ripple and hum at the cathode as lines that keep no step.
 func (e *Evidence) disturbances() ([]beam.Line, error) {
+	return remember(e, "disturbances", e.disturbLines)
+}
+
+func (e *Evidence) disturbLines() ([]beam.Line, error) {
 	drive, err := e.DriveLines()
 	if err != nil {
 		return nil, err

@@ -136,7 +136,27 @@ func (e *Evidence) circuitAt(peak quantity.Voltage) (*circuit.Circuit, error) {
 	if e.condition.Fault.Edit != nil {
 		c = e.condition.Fault.Edit(c)
 	}
-	return c, c.Doubt()
+	return c, ladderDoubt(c)
+}
+
+// ladderDoubt is the first doubt about a value of the multiplier; means and ratings
+// rest on those alone, ripple and stored charge on all (see sound).
+func ladderDoubt(c *circuit.Circuit) error {
+	for _, el := range c.Elements {
+		if el.Doubt != nil && el.Role == circuit.Ladder {
+			return el.Doubt
+		}
+	}
+	return nil
+}
+
+// sound is the first doubt about any value of the circuit.
+func (e *Evidence) sound() error {
+	c, err := e.Circuit()
+	if err != nil {
+		return err
+	}
+	return c.Doubt()
 }
 
 func (e *Evidence) corner() func(string, quantity.Fraction) float64 {

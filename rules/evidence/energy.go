@@ -34,7 +34,7 @@ type Stored struct {
 	Energy quantity.Energy
 }
 
-// StoredByPart is the energy in every capacitor.
+// StoredByPart is the energy in every capacitor whose capacitance is known.
 func (e *Evidence) StoredByPart() ([]Stored, error) {
 	c, err := e.Circuit()
 	if err != nil {
@@ -46,7 +46,9 @@ func (e *Evidence) StoredByPart() ([]Stored, error) {
 	}
 	var all []Stored
 	for _, s := range steady.Stores(c, v) {
-		all = append(all, Stored{s.Element, s.Energy})
+		if s.Doubt == nil {
+			all = append(all, Stored{s.Element, s.Energy})
+		}
 	}
 	return all, nil
 }

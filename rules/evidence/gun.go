@@ -1,6 +1,7 @@
 package evidence
 
 import (
+	"kilovet/hv/document"
 	"kilovet/hv/gun"
 	"kilovet/hv/lack"
 	"kilovet/hv/quantity"
@@ -45,8 +46,8 @@ func (e *Evidence) statedLaw() (gun.Law, error) {
 	if g == nil {
 		return gun.Law{}, lack.Key("gun")
 	}
-	if !g.Cutoff.Set() || !g.ZeroBiasEmission.Set() {
-		return gun.Law{}, lack.Because("the emission follows from no law: cutoff or scale is not given", g.Cutoff.Key, g.ZeroBiasEmission.Key)
+	if err := document.Need(g.Cutoff, g.ZeroBiasEmission); err != nil {
+		return gun.Law{}, err
 	}
 	return gun.New(g.Cutoff.V, g.Exponent.Or(usualExponent), g.ZeroBiasEmission.V)
 }
@@ -108,8 +109,8 @@ func (e *Evidence) RichardsonLimit() (quantity.Current, error) {
 	if g == nil {
 		return 0, lack.Key("gun")
 	}
-	if !g.EmittingArea.Set() || !g.CathodeTemperature.Set() || !g.WorkFunction.Set() {
-		return 0, lack.Because("the limit of the cathode rests on its area, temperature and work function", g.EmittingArea.Key, g.CathodeTemperature.Key, g.WorkFunction.Key)
+	if err := document.Need(g.EmittingArea, g.CathodeTemperature, g.WorkFunction); err != nil {
+		return 0, err
 	}
 	emitter, err := gun.ForWorkFunction(g.WorkFunction.V)
 	if err != nil {

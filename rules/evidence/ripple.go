@@ -5,6 +5,7 @@ import (
 	"math/cmplx"
 
 	"kilovet/hv/circuit"
+	"kilovet/hv/document"
 	"kilovet/hv/lack"
 	"kilovet/hv/quantity"
 	"kilovet/ripple/phasor"
@@ -128,8 +129,8 @@ func (e *Evidence) humFeed() (quantity.Frequency, error) {
 	if h.Feed == nil {
 		return 0, lack.Key("heater.feed")
 	}
-	if !h.Feed.Capacitance.Set() || !h.Feed.CommonMode.Set() {
-		return 0, lack.Because("hum rests on capacitance and common mode of the heater feed", h.Feed.Capacitance.Key, h.Feed.CommonMode.Key)
+	if err := document.Need(h.Feed.Capacitance, h.Feed.CommonMode); err != nil {
+		return 0, err
 	}
 	if e.chain.Site == nil {
 		return 0, lack.Key("site.mains_frequency")

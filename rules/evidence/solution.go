@@ -68,6 +68,9 @@ func (e *Evidence) RMS(a, b string) (quantity.Voltage, error) {
 
 // Swing is the peak-to-peak voltage between two nodes.
 func (e *Evidence) Swing(a, b string) (quantity.Voltage, error) {
+	if err := e.sound(); err != nil {
+		return 0, err
+	}
 	s, err := e.span(a, b)
 	return s.swing(), err
 }

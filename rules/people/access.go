@@ -4,6 +4,7 @@ import (
 	"fmt"
 
 	"kilovet/hv/chain"
+	"kilovet/hv/document"
 	"kilovet/rules/evidence"
 	"kilovet/rules/limits"
 	"kilovet/rules/rule"
@@ -76,8 +77,8 @@ func judgeInterlock(access *chain.Access, f rule.Finding) rule.Finding {
 		return f.Lacking(missing("access.interlock"))
 	}
 	f.Place = lock.Here()
-	if !lock.Restart.Set() || !lock.ActsOn.Set() {
-		return f.Lacking(missing(lock.Restart.Key, lock.ActsOn.Key))
+	if err := document.Need(lock.Restart, lock.ActsOn); err != nil {
+		return f.Lacking(err)
 	}
 	if lock.Restart.V != "manual" {
 		f.Because, f.Remedy, f.Relation, f.Place = "it comes back by itself when the door closes", "make restart a deliberate act", rule.Presence, lock.Restart.Place
@@ -113,8 +114,8 @@ var bonds = rule.Rule{
 
 func judgeBonds(b *chain.EarthBond, f rule.Finding) rule.Finding {
 	f.Place = b.Here()
-	if !b.Count.Set() || !b.Resistance.Set() || !b.TestCurrent.Set() {
-		return f.Lacking(missing(b.Count.Key, b.Resistance.Key, b.TestCurrent.Key))
+	if err := document.Need(b.Count, b.Resistance, b.TestCurrent); err != nil {
+		return f.Lacking(err)
 	}
 	f.Remedy = "fit a second separate bond"
 	if b.Count.V < 2 {

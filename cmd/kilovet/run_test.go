@@ -2,6 +2,7 @@ package main
 
 import (
 	"bytes"
+	_ "embed"
 	"errors"
 	"runtime/debug"
 	"strings"
@@ -19,6 +20,9 @@ func try(in string, columns int, env map[string]string, args ...string) (status 
 	return status, out.String(), errs.String()
 }
 
+//go:embed testdata/gap.toml
+var gap string
+
 func TestColourNeedsATerminalThatWantsIt(t *testing.T) {
 	for _, c := range []struct {
 		columns int
@@ -27,9 +31,18 @@ func TestColourNeedsATerminalThatWantsIt(t *testing.T) {
 	}{
 		{0, nil, false}, {80, nil, true}, {80, map[string]string{"NO_COLOR": "1"}, false}, {80, map[string]string{"NO_COLOR": ""}, true},
 	} {
-		_, out, _ := try("", c.columns, c.env, "review")
+		_, out, _ := try(gap, c.columns, c.env, "review", "-")
 		if got := strings.Contains(out, "\x1b["); got != c.want {
 			t.Errorf("%d columns, %v: colour %t, want %t", c.columns, c.env, got, c.want)
+		}
+	}
+}
+
+func TestEveryRuleHasAPageThatNamesASource(t *testing.T) {
+	for _, r := range rules.All() {
+		status, out, _ := try("", 0, nil, "basis", r.ID)
+		if status != sound || !strings.Contains(out, "\nsource ") || !strings.Contains(out, r.Title) {
+			t.Errorf("%s: status %d: %s", r.ID, status, out)
 		}
 	}
 }

@@ -6,6 +6,8 @@ import (
 	"testing"
 
 	"pgregory.net/rapid"
+
+	"kilovet/hv/quantity"
 )
 
 // The factors of the chromatic disc: 0.3442 and 0.6008 for a Gaussian (J. E. Barth
@@ -51,9 +53,9 @@ func TestHotCathodeInBestFocus(t *testing.T) {
 
 // mixture is the disc of a source under a sine, summed point by point without this
 // package's grid, spectra or tables: the density of the sum is the mean of the
-// source's along the sine, and P(ρ|δ| ≤ r) = ∫ min(1, r²/δ²) of it. Within 1e-5.
+// source's along the sine, and P(ρ|δ| ≤ r) = ∫ min(1, r²/δ²) of it.
 func mixture(amplitude float64, density func(float64) float64, from, to float64) float64 {
-	const points, phases = 6000, 200
+	const points, phases = 4000, 100
 	from, to = from-amplitude, to+amplitude
 	h := (to - from) / points
 	e, p := make([]float64, points), make([]float64, points)
@@ -168,4 +170,45 @@ func anyLines(t *rapid.T) []Distribution {
 		lines = append(lines, unit(form).Scaled(size))
 	}
 	return lines
+}
+
+// A lopsided wave-form meets a lopsided source: turned over it gives another disc
+// of the same rms, so that its sign matters.
+func TestSignOfALopsidedForm(t *testing.T) {
+	up, _, err := Sampled([]quantity.Voltage{0, 0, 0, 0, 0, 1})
+	if err != nil {
+		t.Fatal(err)
+	}
+	down, _, err := Sampled([]quantity.Voltage{0, 0, 0, 0, 0, -1})
+	if err != nil {
+		t.Fatal(err)
+	}
+	a, b := Convolve(thermal(t), unit(up).Scaled(4)), Convolve(thermal(t), unit(down).Scaled(4))
+	near(t, "rms", float64(a.RMS()), float64(b.RMS()), 1e-12)
+	if math.Abs(float64(a.DiscFW50()/b.DiscFW50())-1) < 0.01 {
+		t.Errorf("%v and %v should differ", a.DiscFW50(), b.DiscFW50())
+	}
+	a, b = Convolve(gaussian(t, 1), unit(up).Scaled(4)), Convolve(gaussian(t, 1), unit(down).Scaled(4))
+	near(t, "on an even source it does not", float64(a.DiscFW50()), float64(b.DiscFW50()), 1e-9)
+}
+
+// The work of the search, told by its allocations: a convolution takes 11 or so,
+// and a handful of them must do.
+func TestWorkOfTheSearch(t *testing.T) {
+	e, o, source, d := reviewed(t)
+	s, _ := Compute(e, o, source, d)
+	one := testing.AllocsPerRun(5, func() { Convolve(source, d.Energies) })
+	for _, room := range []float64{1.0001, 1.01, 1.2, 2, 10} {
+		all := testing.AllocsPerRun(1, func() {
+			if _, err := s.RippleAllowed(s.TotalFW50 * quantity.Length(room)); err != nil {
+				t.Fatal(err)
+			}
+		})
+		if all > 10*one {
+			t.Errorf("room %v: %v allocations, %v convolutions", room, all, all/one)
+		}
+	}
+	if n := testing.AllocsPerRun(5, func() { s.Energies.DiscFW50() }); n != 0 {
+		t.Errorf("the disc allocates %v times", n)
+	}
 }

@@ -143,6 +143,38 @@ func TestSampledForms(t *testing.T) {
 	near(t, "disc", float64(unit(w).DiscFW50()), float64(unit(Sine()).DiscFW50()), 1e-4)
 }
 
+// Any closed polygon: rising to one, centred, and as wide as its samples say.
+func TestAnySampledForm(t *testing.T) {
+	rapid.Check(t, func(t *rapid.T) {
+		samples := make([]quantity.Voltage, rapid.IntRange(2, 40).Draw(t, "samples"))
+		for i := range samples {
+			samples[i] = quantity.Voltage(rapid.IntRange(-5, 5).Draw(t, fmt.Sprint(i)))
+		}
+		w, amplitude, err := Sampled(samples)
+		if err != nil || amplitude == 0 {
+			return // level
+		}
+		mean, square, high := 0.0, 0.0, math.Inf(-1)
+		for i, s := range samples {
+			a, b := float64(s), float64(samples[(i+1)%len(samples)])
+			mean += (a + b) / 2 / float64(len(samples))
+			square += (a*a + a*b + b*b) / 3 / float64(len(samples))
+			high = math.Max(high, a)
+		}
+		d := Line{Amplitude: amplitude, Form: w}.Distribution()
+		last := len(d.table.x) - 1
+		for i := 1; i <= last; i++ {
+			if d.table.x[i] < d.table.x[i-1] || d.table.c[i] < d.table.c[i-1]-1e-15 {
+				t.Fatalf("falls at %d: %v", i, d.table)
+			}
+		}
+		near(t, "all of it", d.table.c[last], 1, 1e-15)
+		near(t, "greatest", d.table.x[last]*d.unit, high-mean, 1e-9)
+		near(t, "variance", d.variance(), square-mean*mean, 1e-9)
+		near(t, "convolved with next to nothing", float64(Convolve(d, gaussian(t, float64(amplitude)*1e-3)).RMS()), float64(d.RMS()), 1e-4)
+	})
+}
+
 // A rectangle that is low three quarters of the time holds its 75 % level from one
 // value to the other: the wider reading is taken.
 func TestCentralHalfOfARectangle(t *testing.T) {

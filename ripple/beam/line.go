@@ -55,7 +55,12 @@ func HarmonicLine(name string, f quantity.Frequency, terms []Harmonic) (Line, er
 func (l Line) PeakToPeak() quantity.Voltage { return 2 * l.Amplitude }
 
 // Distribution of the energies the line makes: e times voltage.
-func (l Line) Distribution() Distribution { return Distribution{l.Form.table, float64(l.Amplitude)} }
+func (l Line) Distribution() Distribution {
+	if l.Form.table == nil {
+		panic("beam: line without a wave-form")
+	}
+	return Distribution{l.Form.table, float64(l.Amplitude)}
+}
 
 // Split parts lines into those whose period is at most the averaging time, which
 // blur, and slower ones, which band: within the time they are a drift. The time is
@@ -92,9 +97,6 @@ func Disturb(lines ...Line) (Disturbance, error) {
 	for _, l := range lines {
 		if !notNegative(l.Amplitude) {
 			return d, lack.Range("%s: an amplitude is zero or more, not %s", l.Name, quantity.Text(l.Amplitude))
-		}
-		if l.Form.table == nil && l.Amplitude > 0 {
-			panic("beam: line without a wave-form")
 		}
 		parts = append(parts, l.Distribution())
 		d.PeakToPeak += l.PeakToPeak()

@@ -42,22 +42,10 @@ func (e *Evidence) across(s *chain.Spacing) (gap.Voltages, Condition, error) {
 	if err != nil {
 		return gap.Voltages{}, peak.Under, err
 	}
-	v := gap.Voltages{Peak: peak.Value, LongTerm: lasting.Value, Sharp: e.polarity(s)}
+	// Which electrode is the sharper one is not described: the worse polarity judges.
+	v := gap.Voltages{Peak: peak.Value, LongTerm: lasting.Value, Sharp: gap.Unknown}
 	err = e.alternating(s, live, &v)
 	return v, peak.Under, err
-}
-
-// polarity is that of the live side, taken as the sharper electrode, against the other.
-func (e *Evidence) polarity(s *chain.Spacing) gap.Polarity {
-	a, err := e.Potential(s.From.V)
-	b, err2 := e.Potential(s.To.V)
-	switch {
-	case err != nil || err2 != nil || a == b:
-		return gap.Unknown
-	case a < b:
-		return gap.Negative
-	}
-	return gap.Positive
 }
 
 // alternating adds the swing of a drive at or above 30 kHz.

@@ -1,0 +1,274 @@
+package field
+
+import (
+	"math"
+	"slices"
+
+	"kilovet/hv/lack"
+)
+
+const (
+	rounds = 8 // of refinement, at most
+
+	// Parts of the field on a panel that the last two terms of its Legendre series
+	// may hold: where an electrode has its peak, on natural boundaries, at kinks,
+	// elsewhere, and on interfaces.
+	// The error is at most about as large, at the ends of a panel.
+	peakTail      = 3e-4
+	naturalTail   = 1e-3
+	kinkTail      = 1e-3
+	tailLimit     = 4e-3
+	interfaceTail = 8e-3
+	// nearPeak is the part of its electrode's peak from which a panel counts as there.
+	nearPeak = 0.7
+	// faint is the field, relative to the strongest away from sharp edges, below
+	// which it need not be resolved on its own.
+	faint = 1e-3
+	// peakChange is what the last refinement may change of an electrode's peak.
+	peakChange = 5e-4
+	// mostCuts bounds the cuts of one panel in one round.
+	mostCuts = 12
+	// mostExcess bounds what a first, poor solution may ask for towards a kink.
+	mostExcess = 50
+	// smooths is what halving takes off the excess on a smooth wall, at least.
+	smooths = 30
+)
+
+// adapt divides panels until the unknowns are resolved on every one and the peaks
+// stay, and returns the last two solutions: the difference tells what the last
+// division has changed.
+func (s *solver) adapt() (coarse, fine *solved, err error) {
+	panels := s.firstMesh()
+	var before, now []float64
+	for range rounds {
+		coarse, before = fine, now
+		if fine, err = s.solve(panels); err != nil {
+			return nil, nil, err
+		}
+		wants := s.wants(fine)
+		now = s.peaks(fine)
+		limit := 1.0
+		if largest := most(wants); largest <= 1 {
+			if coarse != nil && settled(before, now) {
+				return coarse, fine, nil
+			}
+			limit = few(wants) // one refinement more, to see what it changes
+		}
+		panels = s.refine(fine.panels, wants, limit)
+	}
+	return nil, nil, lack.Failed("the field is not resolved after %d refinements", rounds)
+}
+
+// settled reports whether no peak has changed by more than the accuracy aimed at.
+func settled(before, now []float64) bool {
+	for i := range now {
+		if math.Abs(now[i]-before[i]) > peakChange*now[i] {
+			return false
+		}
+	}
+	return true
+}
+
+// peaks are the greatest fields on all electrodes away from their sharp edges, for
+// each group in turn; those too faint to be judged are left at nothing.
+func (s *solver) peaks(v *solved) (list []float64) {
+	for g := range s.groups {
+		peaks, strongest := make([]float64, len(s.names)), 0.0
+		for i := range v.sides {
+			k := s.walls[v.sides[i].wall].electrode
+			if k < 0 || s.atSharp(v.sides[i].panel) {
+				continue
+			}
+			for j := range s.fineRule {
+				peaks[k] = math.Max(peaks[k], math.Abs(s.fineRule[j].basis.dot(&v.q[g][i])))
+			}
+			strongest = math.Max(strongest, peaks[k])
+		}
+		for k := range peaks {
+			if peaks[k] < faint*strongest {
+				peaks[k] = 0
+			}
+		}
+		list = append(list, peaks...)
+	}
+	return list
+}
+
+// want says how much more than allowed the last terms of q and du/ds hold of the
+// field on a panel, and whether towards its end or its start.
+type want struct {
+	excess float64
+	toEnd  bool
+}
+
+// few is the excess above which lie the poorest tenth of the panels, two at least.
+func few(wants map[*panel]want) float64 {
+	var all []float64
+	for _, w := range wants {
+		all = append(all, w.excess)
+	}
+	slices.Sort(all)
+	k := max(len(all)-max(2, len(all)/10), 0)
+	return math.Max(all[k]*(1-1e-9), all[len(all)-1]/20)
+}
+
+func most(wants map[*panel]want) (largest float64) {
+	for _, w := range wants {
+		largest = math.Max(largest, w.excess)
+	}
+	return largest
+}
+
+// refine cuts the panels whose excess is above a limit.
+func (s *solver) refine(panels []*panel, wants map[*panel]want, limit float64) (out []*panel) {
+	for _, p := range panels {
+		w := wants[p]
+		out = append(out, s.cutOften(p, w.excess/limit, w.toEnd, mostCuts)...)
+	}
+	return out
+}
+
+// cutOften cuts a panel, and the piece on the side where it is poor again: at a kink
+// every cut takes only the factor of grading off the excess, at an irregular end
+// nothing, so that it is cut to the last.
+func (s *solver) cutOften(p *panel, excess float64, toEnd bool, cuts int) []*panel {
+	if excess <= 1 || cuts == 0 || s.finest(p) {
+		return []*panel{p}
+	}
+	a, b := s.cut(p)
+	rest := excess / smooths
+	switch left, right := s.grades(p); {
+	case left && !right:
+		rest, toEnd = min(excess, mostExcess)*s.kept(p, 0), false
+	case right && !left:
+		rest, toEnd = min(excess, mostExcess)*s.kept(p, 1), true
+	}
+	if toEnd {
+		return append([]*panel{a}, s.cutOften(b, rest, toEnd, cuts-1)...)
+	}
+	return append(s.cutOften(a, rest, toEnd, cuts-1), b)
+}
+
+// kept is the part of the excess that a cut towards an end of a wall leaves.
+func (s *solver) kept(p *panel, k int) float64 {
+	if s.walls[p.wall].ends[k].irregular {
+		return 1
+	}
+	return grade
+}
+
+// wants lists what every panel wants, the most over its sides and the groups.
+func (s *solver) wants(v *solved) map[*panel]want {
+	wants := map[*panel]want{}
+	for g := range s.groups {
+		at, peaks, strongest := s.strengths(v, g)
+		if strongest == 0 { // the earthed mirror plane has no panels
+			continue
+		}
+		for i := range v.sides {
+			sd := &v.sides[i]
+			if s.finest(sd.panel) {
+				continue
+			}
+			w := s.tail(sd, &v.u[g][i], &v.q[g][i])
+			w.excess /= math.Max(s.measure(sd, at[i], &v.q[g][i]), faint*strongest) * s.allowed(sd, at[i], peaks)
+			if w.excess > wants[sd.panel].excess {
+				wants[sd.panel] = w
+			}
+		}
+	}
+	return wants
+}
+
+// tail is the size of the last two terms of the Legendre series of q and du/ds, and
+// the end at which they have the same sign as each other.
+func (s *solver) tail(sd *side, u, q *nodal) want {
+	last, before := s.legendre[order-1].dot(q), s.legendre[order-2].dot(q)
+	w := want{math.Hypot(last, before), last*before > 0}
+	if sd.u >= 0 {
+		last, before = s.legendre[order-1].dot(u), s.legendre[order-2].dot(u)
+		if slope := math.Hypot(last, before) * order * order / sd.panel.h; slope > w.excess {
+			w = want{slope, last*before > 0}
+		}
+	}
+	return w
+}
+
+// strengths are the largest field at the nodes of every side, and away from sharp
+// edges on every electrode and anywhere.
+func (s *solver) strengths(v *solved, g int) (at []float64, peaks map[int]float64, strongest float64) {
+	at, peaks, strongest = make([]float64, len(v.sides)), map[int]float64{}, 0.0
+	for i := range v.sides {
+		sd := &v.sides[i]
+		at[i] = s.strongest(sd, &v.u[g][i], &v.q[g][i])
+		if k := s.walls[sd.wall].electrode; !s.atSharp(sd.panel) {
+			strongest = math.Max(strongest, at[i])
+			peaks[k] = math.Max(peaks[k], at[i])
+		}
+	}
+	return at, peaks, strongest
+}
+
+// measure is the field that the tail of a side is held against: the largest there, or
+// towards a kink, beyond which it may be much less, that at the kink.
+func (s *solver) measure(sd *side, at float64, q *nodal) float64 {
+	if s.walls[sd.wall].kind != conductor || !s.atKink(sd.panel) {
+		return at
+	}
+	end := &s.fineRule[0]
+	if left, _ := s.grades(sd.panel); !left {
+		end = &s.fineRule[finePoints-1]
+	}
+	return math.Max(at/10, math.Abs(end.basis.dot(q)))
+}
+
+// allowed is the tail a side may have.
+func (s *solver) allowed(sd *side, at float64, peaks map[int]float64) float64 {
+	switch w := &s.walls[sd.wall]; {
+	case w.kind == natural:
+		return naturalTail
+	case w.kind == interfaces:
+		return interfaceTail
+	case w.kind == conductor && at >= nearPeak*peaks[w.electrode] && !s.atSharp(sd.panel):
+		return peakTail
+	case w.kind == conductor && s.atKink(sd.panel):
+		return kinkTail
+	}
+	return tailLimit
+}
+
+// strongest field at the nodes of a side.
+func (s *solver) strongest(sd *side, u, q *nodal) (most float64) {
+	for i := range order {
+		most = math.Max(most, math.Hypot(q[i], s.slope[i].dot(u)*2/sd.panel.h))
+	}
+	return most
+}
+
+// atSharp reports whether a panel ends at a sharp edge.
+func (s *solver) atSharp(p *panel) bool {
+	left, right := s.grades(p)
+	w := &s.walls[p.wall]
+	return left && w.ends[0].sharp || right && w.ends[1].sharp
+}
+
+// atKink reports whether a panel ends where the curvature jumps.
+func (s *solver) atKink(p *panel) bool {
+	left, right := s.grades(p)
+	w := &s.walls[p.wall]
+	return left && w.ends[0].kink || right && w.ends[1].kink
+}
+
+// finest reports whether a panel lies so near an irregular end that nothing is
+// gained by cutting it: the last panel of grading, and the one beside it, which
+// shows what the last cannot hold.
+func (s *solver) finest(p *panel) bool {
+	w := &s.walls[p.wall]
+	for k, before := range []float64{p.start, w.curve.length - p.start - p.h} {
+		floor := floorOf(w.ends[k])
+		if w.ends[k].graded() && before <= floor && (p.h <= floor || before > 1e-9*p.h) {
+			return true
+		}
+	}
+	return false
+}

@@ -1,0 +1,227 @@
+package field
+
+import (
+	"math"
+	"math/cmplx"
+
+	"kilovet/hv/lack"
+	"kilovet/hv/quantity"
+)
+
+// Line is a field line.
+type Line struct {
+	Points []LinePoint
+	Ends   string // the electrode it ends on; empty where it leaves the model
+}
+
+// LinePoint is a place on a field line.
+type LinePoint struct {
+	Along    quantity.Length // from the start
+	Strength quantity.Field
+	Reading
+}
+
+// linePart is the part of the whole potential difference that one step may take.
+const linePart = 0.02
+
+// Line is the field line from a peak on an electrode to where it ends: the critical
+// line of the gap, with the field along it. It passes through surfaces of
+// dielectrics, where it has a place on either side.
+func (f *Field) Line(from Peak) (Line, error) {
+	if from.face.side < 0 || f.walls[f.values.sides[from.face.side].wall].electrode < 0 {
+		return Line{}, lack.Range("a field line is drawn from the peak on an electrode")
+	}
+	x, u, g := f.surface(f.values, from.face, from.t)
+	if cmplx.Abs(g) == 0 {
+		return Line{}, lack.Failed("at %v there is no field to follow", from.At)
+	}
+	return f.lineFrom(from.face, from.t, x, u, g)
+}
+
+func (f *Field) lineFrom(fc face, at float64, x complex128, u float64, g complex128) (Line, error) {
+	t := &tracer{Field: f, region: f.regionOf(fc), along: 1, tolerance: 1e-6}
+	_, path := f.values.sides[fc.side].panel.at(at)
+	if into := path * complex(0, -fc.sign); real(g*cmplx.Conj(into)) < 0 {
+		t.along = -1
+	}
+	line := Line{}
+	length, here := 0.0, x
+	t.put = func(x complex128, u float64, g complex128) complex128 {
+		length += apart(here, x)
+		here = x
+		r := t.reading(t.region, x, u, g)
+		line.Points = append(line.Points, LinePoint{quantity.Length(length * t.unit), r.Strength(), r})
+		return x
+	}
+	span := f.span()
+	t.longest = func(_ complex128, g complex128) float64 { return linePart * span / cmplx.Abs(g) }
+	t.put(x, u, g)
+	end, err := t.follow(x)
+	if end != nil && end.electrode >= 0 {
+		line.Ends = f.names[end.electrode]
+	}
+	return line, err
+}
+
+// span is the whole potential difference, zero at infinity or the boundary included.
+func (f *Field) span() float64 {
+	low, high := 0.0, 0.0
+	for _, v := range f.volts {
+		low, high = min(low, v), max(high, v)
+	}
+	return high - low
+}
+
+const (
+	traceSteps = 3000 // at most
+	traceWide  = 5.0  // extents of the figure a line may go away from its start
+	leastStep  = 1e-9 // of the extent
+)
+
+// tracer follows a line along the field or across it.
+type tracer struct {
+	*Field
+	region    int
+	along     complex128 // ±1 with or against the gradient, ±i across it
+	tolerance float64    // of a step, relative
+	longest   func(x, g complex128) float64
+	put       func(x complex128, u float64, g complex128) complex128 // the place it is put at
+	done      func(x complex128) bool                                // nil: never
+}
+
+// direction of the line at a point, a unit vector, and the field there.
+func (t *tracer) direction(x complex128) (d complex128, u float64, g complex128) {
+	u, g = t.look(t.values, t.region, x)
+	if size := cmplx.Abs(g); size > 0 {
+		d = g * t.along / complex(size, 0)
+	}
+	return d, u, g
+}
+
+// follow goes on by Bogacki and Shampine's rule of third order with its error
+// estimate (Appl. Math. Lett. 2, 321, 1989), until a wall without a way through, the
+// axis across, or far away. It returns the wall.
+func (t *tracer) follow(start complex128) (*wall, error) {
+	x, h := start, 1e-4
+	for range traceSteps {
+		d, _, g := t.direction(x)
+		if d == 0 || apart(x, start) > traceWide || t.done != nil && t.done(x) {
+			return nil, nil
+		}
+		h = min(h, t.longest(x, g))
+		next, miss := t.step(x, d, h)
+		if miss > t.tolerance*h && h > leastStep {
+			h = max(h/2, leastStep)
+			continue
+		}
+		if w, at := t.crossed(x, next); w != nil {
+			if x = at; !t.through(w, at) {
+				return w, nil
+			}
+			h /= 2
+			continue
+		}
+		if real(next) < 0 {
+			if t.across() {
+				t.arrive(t.atAxis(x, next))
+				return nil, nil
+			}
+			next = complex(0, imag(next))
+		}
+		x = t.arrive(next)
+		if miss < t.tolerance*h/8 {
+			h *= 1.6
+		}
+	}
+	return nil, lack.Failed("a line from %s does not end within %d steps", t.describe(start), traceSteps)
+}
+
+// across reports whether the line is an equipotential.
+func (t *tracer) across() bool { return imag(t.along) != 0 }
+
+// arrive puts a point on the line.
+func (t *tracer) arrive(x complex128) complex128 {
+	_, u, g := t.direction(x)
+	return t.put(x, u, g)
+}
+
+// atAxis is where a step meets the axis.
+func (t *tracer) atAxis(x, next complex128) complex128 {
+	part := real(x) / (real(x) - real(next))
+	return complex(0, imag(x)+part*(imag(next)-imag(x)))
+}
+
+func (t *tracer) step(x, d1 complex128, h float64) (next complex128, miss float64) {
+	hc := complex(h, 0)
+	d2, _, _ := t.direction(x + d1*hc/2)
+	d3, _, _ := t.direction(x + d2*hc*0.75)
+	next = x + hc*(2*d1+3*d2+4*d3)/9
+	d4, _, _ := t.direction(next)
+	return next, cmplx.Abs(hc * (-5*d1/72 + d2/12 + d3/9 - d4/8))
+}
+
+// crossed finds the wall that a step from x runs into first, and where. A natural
+// boundary is met only across the field: along it a line stays beside it.
+func (t *tracer) crossed(x, next complex128) (first *wall, at complex128) {
+	best := math.Inf(1)
+	for i := range t.walls {
+		w := &t.walls[i]
+		if w.kind == natural && !t.across() || w.left != t.region && w.right != t.region {
+			continue
+		}
+		for _, p := range w.curve.crossings(x, next) {
+			if d := apart(p, x); d > 2*onSurface && d < best {
+				best, first, at = d, w, p
+			}
+		}
+	}
+	return first, at
+}
+
+// through takes the line to a wall, and beyond it if there is a way.
+func (t *tracer) through(w *wall, at complex128) bool {
+	t.arrive(at)
+	if w.kind != interfaces {
+		return false
+	}
+	t.region = w.left + w.right - t.region
+	t.arrive(at)
+	return true
+}
+
+// crossings are the points at which a curve crosses the straight way from a to b.
+func (c *curve) crossings(a, b complex128) (list []complex128) {
+	way := b - a
+	keep := func(part float64) {
+		x := a + way*complex(part, 0)
+		if part < 0 || part > 1 {
+			return
+		}
+		if s := c.project(x); s >= -1e-12 && s <= c.length+1e-12 {
+			list = append(list, x)
+		}
+	}
+	if c.radius == 0 {
+		if det := imag(cmplx.Conj(way) * c.along); math.Abs(det) > 1e-14*cmplx.Abs(way) {
+			keep(imag(cmplx.Conj(c.from-a)*c.along) / det)
+		}
+		return list
+	}
+	rel := a - c.centre // |rel + part·way| = radius
+	p, q := real(rel*cmplx.Conj(way)), real(way*cmplx.Conj(way))
+	if root := p*p - q*(real(rel*cmplx.Conj(rel))-c.radius*c.radius); root >= 0 && q > 0 {
+		keep((-p - math.Sqrt(root)) / q)
+		keep((-p + math.Sqrt(root)) / q)
+	}
+	return list
+}
+
+// project drops a point onto the curve: the length at which it lies beside it, below
+// 0 or beyond the length where it does not.
+func (c *curve) project(x complex128) float64 {
+	if c.radius == 0 {
+		return real((x - c.from) * cmplx.Conj(c.along))
+	}
+	spoke, _ := c.at(c.length / 2)
+	return c.length/2 + cmplx.Phase((x-c.centre)/(spoke-c.centre))/c.bending
+}

@@ -69,14 +69,15 @@ func sources(t *testing.T) []source {
 	return all
 }
 
-// walk visits every file but those of version control.
+// walk visits every file but those in hidden folders, which the go tool passes over
+// too; the checks in .ci belong to the project.
 func walk(t *testing.T, visit func(name string)) {
 	t.Helper()
 	err := filepath.WalkDir(".", func(name string, d fs.DirEntry, err error) error {
 		switch {
 		case err != nil:
 			return err
-		case d.IsDir() && d.Name() == ".git":
+		case d.IsDir() && strings.HasPrefix(d.Name(), ".") && d.Name() != "." && d.Name() != ".ci":
 			return fs.SkipDir
 		case !d.IsDir():
 			visit(filepath.ToSlash(name))

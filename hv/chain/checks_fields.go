@@ -57,8 +57,8 @@ func checkProfiles(s *survey) {
 func (s *survey) profile(strokes []Stroke, closed bool) {
 	sound := true
 	for i := range strokes {
-		if strokes[i].Line == 0 {
-			return // refused in reading
+		if !s.sound(strokes[i].Place) {
+			return
 		}
 		if i == 0 {
 			sound = s.start(&strokes[i]) && sound

@@ -9,20 +9,32 @@ import (
 
 // checkNodes looks up every node that the description names.
 func checkNodes(s *survey) {
-	if !s.legible {
+	s.newNodes()
+	if !s.legible || !s.endsKnown() {
 		return
 	}
+	if s.Access != nil {
+		s.eachNode(s.Access.Touchable)
+	}
+	if s.Multiplier != nil { // else there are hardly any, and what needs them is reported apart
+		s.chainNodes()
+	}
+}
+
+// endsKnown reports whether all ends of parts are legible: any may name a new node.
+func (s *survey) endsKnown() bool {
+	return !slices.ContainsFunc(s.Parts, func(p Part) bool { return !s.sound(p.From.Place) || !s.sound(p.To.Place) })
+}
+
+func (s *survey) chainNodes() {
 	for i := range s.Loads {
-		s.node(s.Loads[i].At)
+		s.toGround(s.Loads[i].At)
 	}
 	for i := range s.Bleeders {
-		s.node(s.Bleeders[i].At)
+		s.toGround(s.Bleeders[i].At)
 	}
 	if s.Divider != nil {
-		s.node(s.Divider.Senses)
-		if v := s.Divider.Senses.V; v == "divider.tap" || v == "ground" {
-			s.fault(s.Divider.Senses.Place, "the divider cannot sense "+v, `name the node whose voltage it measures, as in senses = "output"`)
-		}
+		s.sensedNode(s.Divider.Senses)
 	}
 	for i := range s.Spacings {
 		sp := &s.Spacings[i]
@@ -30,15 +42,26 @@ func checkNodes(s *survey) {
 		s.node(sp.To)
 		s.eachNode(sp.Also)
 	}
-	if s.Access != nil {
-		s.eachNode(s.Access.Touchable)
-	}
 	for i := range s.Fields {
 		for j := range s.Fields[i].Electrodes {
 			s.node(s.Fields[i].Electrodes[j].Node)
 		}
 	}
-	s.newNodes()
+}
+
+// toGround judges the node of what hangs between a node and ground.
+func (s *survey) toGround(at document.Given[string]) {
+	s.node(at)
+	if s.sound(at.Place) && (at.V == "ground" || at.V == "foot") {
+		s.fault(at.Place, "both ends on ground", `name the node at high voltage, as in at = "output"`)
+	}
+}
+
+func (s *survey) sensedNode(senses document.Given[string]) {
+	s.node(senses)
+	if v := senses.V; s.sound(senses.Place) && (v == "divider.tap" || v == "ground" || v == "foot") {
+		s.fault(senses.Place, "the divider cannot sense "+v, `name the node whose voltage it measures, as in senses = "output"`)
+	}
 }
 
 func (s *survey) eachNode(list document.Given[[]string]) {
@@ -47,10 +70,9 @@ func (s *survey) eachNode(list document.Given[[]string]) {
 	}
 }
 
-// node reports a name that is no node. Without a multiplier there are hardly any,
-// and what needs them is reported apart.
+// node reports a name that is no node.
 func (s *survey) node(name document.Given[string]) {
-	if s.sound(name.Place) && !s.nodes[name.V] && s.Multiplier != nil && !s.uncounted(name.V) {
+	if s.sound(name.Place) && !s.nodes[name.V] && !s.uncounted(name.V) {
 		s.fault(name.Place, quoted(name.V)+" is no node of this chain", oneOf("node", "", name.V, s.listed))
 	}
 }
@@ -58,7 +80,7 @@ func (s *survey) node(name document.Given[string]) {
 // uncounted reports whether a name is that of a stage, and the number of stages unknown.
 func (s *survey) uncounted(name string) bool {
 	family, _, _ := strings.Cut(name, ".")
-	return (family == "stage" || family == "coupling") && !s.sound(s.Multiplier.Stages.Place)
+	return (family == "stage" || family == "coupling") && s.Multiplier != nil && !s.sound(s.Multiplier.Stages.Place)
 }
 
 // newNodes judges the names that loose parts give to new nodes: none may pass for
@@ -78,7 +100,7 @@ func (s *survey) newNodes() {
 			switch {
 			case ok && strings.EqualFold(near, end.V):
 				s.fault(end.Place, quoted(end.V)+" differs by upper and lower case only from a node", "write "+quoted(near))
-			case reserved(end.V) && (s.Multiplier == nil || !s.uncounted(end.V)):
+			case reserved(end.V) && s.legible && !s.uncounted(end.V):
 				s.fault(end.Place, quoted(end.V)+" is no node of this chain, and the name is kept for one", oneOf("node", "", end.V, fixed))
 			}
 		}

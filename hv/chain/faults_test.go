@@ -71,6 +71,26 @@ name = "a"
 node = "cathode" # FAULT 8 electrode: field.electrodes.node: without a multiplier nothing tells the voltage of a node
 profile = [{ from = ["1 mm", "0 mm"] }, { to = ["2 mm", "0 mm"] }]
 `,
+	"touchable without multiplier": `format = 1
+[access]
+touchable = ["ground", "divider.tap"] # FAULT 13 node: access.touchable: "divider.tap" is no node of this chain; nodes: ground, mains
+[[spacing]]
+name = "gap"
+medium = "air"
+voltage = "20 kV"
+`,
+	"of another form": `format = 1
+drive = 3        # FAULT 9 form: drive: the number 3 where a table is wanted
+[[multiplier]]   # FAULT 1 form: multiplier: there can be only one; write [multiplier]
+polarity = "negative"
+stages = 3
+coupling_capacitor.value = "1 nF"
+smoothing_capacitor = "1 nF" # FAULT 23 form: multiplier.smoothing_capacitor: text "1 nF" where a table is wanted
+[load]           # FAULT 1 form: load: one table where there can be several; write [[load]]
+name = "a"
+at = "stage.4"   # FAULT 6 node: load.at: "stage.4" is no node
+current = "1 uA"
+`,
 	"without drive": `format = 1
 [multiplier]    # FAULT 1 multiplier: multiplier: a multiplier without a drive; describe [drive]
 polarity = "negative"
@@ -273,6 +293,9 @@ at = "Output"          # FAULT 6 node: load.at: "Output" is no node of this chai
 current = "1 uA"
 [[bleeder]]
 at = "stage.4"         # FAULT 6 node: bleeder.at: "stage.4" is no node of this chain; was "stage.1" meant?
+resistor.value = "1 Gohm"
+[[bleeder]]
+at = "foot"            # FAULT 6 node: bleeder.at: both ends on ground; name the node
 resistor.value = "1 Gohm"
 [access]
 touchable = ["divider.tap", "rod", "cathodes"] # FAULT 13 node: access.touchable: "rod" is no node of this chain; nodes: # FAULT 13 node: "cathodes" is no node

@@ -34,18 +34,27 @@ func Checks() []Check { return slices.Clone(checks) }
 // survey is a description under the checks across its keys.
 type survey struct {
 	*Chain
-	refused map[[2]int]bool // by line and column: given, but not accepted
-	legible bool            // nothing was left unread: what is not there is absent
+	refused map[spot]bool // given, but not accepted
+	void    map[spot]bool // so much so that nothing is known of it
+	legible bool          // nothing was left unread: what is not there is absent
 	nodes   map[string]bool
 	listed  []string // the nodes in order
 	faults  document.Faults
 	code    document.Code // of the check that runs
 }
 
+// spot is a line and column.
+type spot struct{ line, column int }
+
 func newSurvey(c *Chain, found document.Faults) *survey {
-	s := &survey{Chain: c, refused: map[[2]int]bool{}, legible: !found.Unread(), nodes: map[string]bool{}, listed: c.Nodes()}
+	s := &survey{Chain: c, refused: map[spot]bool{}, void: map[spot]bool{}, legible: !found.Unread(), nodes: map[string]bool{}, listed: c.Nodes()}
 	for _, f := range found {
-		s.refused[[2]int{f.Line, f.Column}] = true
+		at := spot{f.Line, f.Column}
+		s.refused[at] = true
+		switch f.Code {
+		case document.Form, document.Syntax, document.Nesting, document.Twice:
+			s.void[at] = true
+		}
 	}
 	for _, name := range s.listed {
 		s.nodes[name] = true
@@ -53,15 +62,18 @@ func newSurvey(c *Chain, found document.Faults) *survey {
 	return s
 }
 
-// fault reports a fault at a place of the description.
+// fault reports a fault at a place of the description, unless it only follows from
+// one found in reading.
 func (s *survey) fault(at document.Place, what, remedy string) {
-	s.faults = append(s.faults, document.Fault{Code: s.code, Key: at.Key, Line: at.Line, Column: at.Column, What: what, Remedy: remedy})
+	if !s.void[spot{at.Line, at.Column}] {
+		s.faults = append(s.faults, document.Fault{Code: s.code, Key: at.Key, Line: at.Line, Column: at.Column, What: what, Remedy: remedy})
+	}
 }
 
 // sound reports whether a value was given and accepted, so that it can be judged
 // against others.
 func (s *survey) sound(at document.Place) bool {
-	return at.Line > 0 && !s.refused[[2]int{at.Line, at.Column}]
+	return at.Line > 0 && !s.refused[spot{at.Line, at.Column}]
 }
 
 // without reports whether something is truly absent: neither given nor perhaps

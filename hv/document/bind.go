@@ -61,13 +61,17 @@ func (b *binder) field(n *node, d Declared, into reflect.Value) {
 	}
 }
 
+// oneTable fills the struct of a table. Of another form, what was given is read as
+// far as it can be, so that it is neither called absent nor left unjudged.
 func (b *binder) oneTable(n *node, d Declared, into reflect.Value) {
 	if n.kind != table {
 		b.wrongForm(n, d)
-		for _, item := range n.items {
-			b.stray(item, d)
+		for i, item := range n.items {
+			if i > 0 && item.kind == table {
+				b.table(item, reflect.New(d.kind).Elem(), d.Path)
+			}
 		}
-		return
+		n = n.asTable()
 	}
 	if into.Kind() == reflect.Pointer {
 		into.Set(reflect.New(d.kind))
@@ -76,29 +80,34 @@ func (b *binder) oneTable(n *node, d Declared, into reflect.Value) {
 	b.table(n, into, d.Path)
 }
 
+// asTable is the table that something of another form is read as: of several the
+// first, else one of which nothing is known.
+func (n *node) asTable() *node {
+	switch {
+	case n.kind == table:
+		return n
+	case len(n.items) > 0 && n.items[0].kind == table:
+		return n.items[0]
+	}
+	return &node{kind: table, partial: true, place: n.place}
+}
+
 func (b *binder) someTables(n *node, d Declared, into reflect.Value) {
+	items := n.items
 	if n.kind != tables && n.kind != list {
 		b.wrongForm(n, d)
-		b.stray(n, d)
-		return
+		items = []*node{n.asTable()}
 	}
-	into.Set(reflect.MakeSlice(into.Type(), len(n.items), len(n.items)))
-	for i, item := range n.items {
+	into.Set(reflect.MakeSlice(into.Type(), len(items), len(items)))
+	for i, item := range items {
 		if item.kind != table {
 			b.fault(Form, item.place, d.Path, describeNode(item)+" where a table is wanted", "write each in braces, as in { key = value }")
-			continue
+			item = item.asTable()
 		}
 		b.table(item, into.Index(i), d.Path)
 	}
-	if d.Needed && len(n.items) == 0 {
+	if d.Needed && len(items) == 0 {
 		b.fault(Length, n.place, d.Path, "an empty list", "give at least one")
-	}
-}
-
-// stray judges the keys of a table that has no field to go to.
-func (b *binder) stray(n *node, d Declared) {
-	if n.kind == table {
-		b.table(n, reflect.New(d.kind).Elem(), d.Path)
 	}
 }
 

@@ -85,10 +85,10 @@ func (fs Faults) Sorted() Faults {
 	return fs
 }
 
-// Unread reports whether some part of the description could not be read at all,
-// so that what seems to be absent may only be illegible.
+// Unread reports whether some part of the description could not be read at all and
+// not even its key is known, so that what seems to be absent may only be illegible.
 func (fs Faults) Unread() bool {
 	return slices.ContainsFunc(fs, func(f Fault) bool {
-		return slices.Contains([]Code{Size, Encoding, Empty, Syntax, Nesting}, f.Code)
+		return f.Key == "" && slices.Contains([]Code{Size, Encoding, Empty, Syntax, Nesting}, f.Code)
 	})
 }

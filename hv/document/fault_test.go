@@ -189,7 +189,7 @@ load = 3             # FAULT 8 quantity: shelf.load: 3: a number without a unit
 [supply]
 peak = 1.75 kV       # FAULT 8 syntax: supply.peak: 1.75 kV stands without quotes; write "1.75 kV"
 frequency = 38,5     # FAULT 13 syntax: supply.frequency: 38,5 stands without quotes
-stages               # FAULT 1 syntax: supply.stages: neither a key with its value, a [table] nor a comment; write key = value
+stages               # FAULT 1 syntax: neither a key with its value, a [table] nor a comment; write key = value
 form =               # FAULT 1 syntax: supply.form: a key without a value; write its value after "="
 = 5                  # FAULT 1 syntax: a value without a key
 taps = ["1 V"        
@@ -199,11 +199,11 @@ leads = { length = 1 m, ends = [] } # FAULT 20 syntax: 1 m stands without quotes
 exponent = "2
 #^ FAULT 12 syntax: supply.exponent: the quotes are not closed; close them on the same line
 earthed = maybe      # FAULT 11 syntax: maybe stands without quotes
-[room                # FAULT 1 syntax: this header cannot be read; write [table] or [[table]]
+[room                # FAULT 1 syntax: room: this header cannot be read; write [table] or [[table]]
 height = "3"         # FAULT 10 quantity: room.height: "3": a number without a unit
 `,
 	"nesting": `name = "x"
-shelf = [[[[[[[[[[[[[[[1]]]]]]]]]]]]]]] # FAULT 1 nesting: nested too deeply; at most 12 tables or lists within each other
+shelf = [[[[[[[[[[[[[[[1]]]]]]]]]]]]]]] # FAULT 1 nesting: shelf: nested too deeply; at most 12 tables or lists within each other
 `,
 	"columns count characters": `name = "x"
 [supply]

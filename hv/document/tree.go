@@ -96,7 +96,7 @@ func (g *grower) statement(st statement) {
 	switch {
 	case st.deep:
 		start := g.cursor.at(st.start)
-		g.fault(Nesting, start, nil, "nested too deeply", fmt.Sprintf("at most %d tables or lists within each other", deepest))
+		g.fault(Nesting, start, g.named(st), "nested too deeply", fmt.Sprintf("at most %d tables or lists within each other", deepest))
 		g.unread(st, start)
 		return
 	case st.broken:
@@ -121,27 +121,35 @@ func (g *grower) syntax(st statement, bad *unreadable) Place {
 		g.fault(Twice, at, g.under(inner), "given a second time between the same braces", "keep one")
 		return at
 	}
-	var key []string
-	if path := plainPath(g.text[st.entry.start:st.entry.end]); st.kind == pair && path != nil {
-		key = g.under(path)
-	}
 	d := st.diagnose(g.text, bad)
 	at := g.cursor.at(d.offset)
-	g.fault(Syntax, at, key, d.what, d.remedy)
+	g.fault(Syntax, at, g.named(st), d.what, d.remedy)
 	return at
 }
 
-// unread takes from an illegible statement what its key gives away, so that no key
-// is called missing that only could not be read. It stands where its fault is.
-func (g *grower) unread(st statement, at Place) {
+// named is the path of the key or table that an illegible statement is about; nil
+// where that is illegible too.
+func (g *grower) named(st statement) []string {
 	path := plainPath(g.text[st.entry.start:st.entry.end])
 	switch {
-	case st.kind != pair && path != nil:
-		g.header(path, st.kind, at)
+	case path == nil || st.kind != pair:
+		return path
+	case st.entry.value.start == 0: // without "=" it may be anything
+		return nil
+	}
+	return g.under(path)
+}
+
+// unread takes from an illegible statement what its key gives away, so that nothing
+// is called missing that only could not be read. It stands where its fault is.
+func (g *grower) unread(st statement, at Place) {
+	switch named := g.named(st); {
+	case st.kind != pair && named != nil:
+		g.header(named, st.kind, at)
 	case st.kind != pair:
-		g.context = &node{kind: table}
-	case path != nil && st.entry.value.end > st.entry.value.start:
-		g.claim(path, at)
+		g.context, g.path = &node{kind: table}, ""
+	case named != nil:
+		g.claim(plainPath(g.text[st.entry.start:st.entry.end]), at)
 	default:
 		g.context.partial = true
 	}

@@ -24,6 +24,7 @@ func figures(e *evidence.Evidence) []figure.Figure {
 		once(c, e)
 	}
 	spacings(c, e)
+	fields(c, e)
 	return c.list
 }
 

@@ -89,7 +89,7 @@ func farads(values []float64) string {
 
 func networkCases(t *testing.T) []networkCase {
 	t.Helper()
-	data, err := os.ReadFile("../ripple/network/testdata/network_cases.json")
+	data, err := os.ReadFile("../ripple/network/testdata/cases.json")
 	if err != nil {
 		t.Fatal(err)
 	}

@@ -11,7 +11,9 @@ import (
 )
 
 // Rules lists the rules of this family.
-func Rules() []rule.Rule { return []rule.Rule{described, clearance, creepage, breakdown, corona} }
+func Rules() []rule.Rule {
+	return []rule.Rule{described, clearance, creepage, breakdown, corona, fieldStrength}
+}
 
 func finding(id string, concern rule.Concern, relation rule.Relation, s *chain.Spacing) rule.Finding {
 	f := rule.Finding{Rule: id, Concern: concern, Relation: relation}

@@ -8,6 +8,8 @@ import (
 	"strings"
 	"testing"
 
+	"pgregory.net/rapid"
+
 	"kilovet/hv/document"
 )
 
@@ -86,6 +88,30 @@ func TestOneFaultStaysOne(t *testing.T) {
 			}
 		}
 	}
+}
+
+// TestManyFaultsAtOnce spoils any number of keys together: every one is reported, in
+// document order, and nothing else is.
+func TestManyFaultsAtOnce(t *testing.T) {
+	lines := wholeDraft(t)
+	rapid.Check(t, func(t *rapid.T) {
+		changed := slices.Clone(lines)
+		share := rapid.IntRange(1, 40).Draw(t, "one in")
+		var want, got []int
+		for i, line := range lines {
+			if m := keyLine.FindStringSubmatch(line); m != nil && rapid.IntRange(1, share).Draw(t, "spoil") == 1 {
+				changed[i] = rapid.SampledFrom([]string{m[1] + " = {}\n", m[1] + " = a b\n", m[1] + " = 'open\n", m[1] + "x = " + m[2] + "\n"}).Draw(t, "how")
+				want = append(want, i+1)
+			}
+		}
+		_, faults := Read([]byte(strings.Join(changed, "")))
+		for _, f := range faults {
+			got = append(got, f.Line)
+		}
+		if !slices.IsSorted(got) || !slices.Equal(slices.Compact(got), want) {
+			t.Fatalf("spoilt lines %v\n%v", want, faults)
+		}
+	})
 }
 
 // TestDraftHoldsEveryKey looks for the last part of every declared key with its meaning.

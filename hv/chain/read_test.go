@@ -7,6 +7,7 @@ import (
 	"path/filepath"
 	"strings"
 	"testing"
+	"unicode"
 
 	"kilovet/hv/chain"
 	"kilovet/hv/document"
@@ -194,6 +195,9 @@ func FuzzRead(f *testing.F) {
 		for _, fault := range faults {
 			if fault.Line < 1 || fault.Column < 1 || fault.What == "" || fault.Remedy == "" || fault.Code == "" {
 				t.Errorf("incomplete: %+v", fault)
+			}
+			if strings.ContainsFunc(fault.Error(), unicode.IsControl) {
+				t.Errorf("more than one line: %q", fault.Error())
 			}
 			if fault.Line < line || fault.Line == line && fault.Column < column {
 				t.Errorf("out of order: %v", fault)

@@ -181,7 +181,7 @@ func (b *binder) unknown(n *node, name, path string, declared []Declared) string
 	if !ok {
 		near = ""
 	}
-	b.fault(Unknown, n.keys[name], join(path, brief(name)), what, b.suggestion(name, near)+"accepted here: "+strings.Join(accepted, ", "))
+	b.fault(Unknown, n.keys[name], join(path, pathText([]string{name})), what, b.suggestion(name, near)+"accepted here: "+strings.Join(accepted, ", "))
 	return near
 }
 

@@ -22,10 +22,18 @@ type Outline struct {
 // what is switched off with "#" and the key or bracket right after it.
 func Draft(w io.Writer, into any, o Outline) error {
 	d := &drafter{Outline: o}
+	if d.Off == nil {
+		d.Off = func(string) bool { return false }
+	}
+	if d.Instead == nil {
+		d.Instead = func(string) string { return "" }
+	}
 	for line := range strings.Lines(o.Head) {
 		d.WriteString(strings.TrimRight("# "+line, "\n ") + "\n")
 	}
-	d.WriteString("\n")
+	if o.Head != "" {
+		d.WriteString("\n")
+	}
 	d.section(structType(into), "", "", false)
 	_, err := d.WriteTo(w)
 	return err

@@ -5,6 +5,7 @@ import (
 	"fmt"
 	"math"
 	"reflect"
+	"slices"
 	"strconv"
 	"strings"
 	"time"
@@ -104,11 +105,12 @@ func (b *binder) quantity(n *node, d Declared, value reflect.Value) {
 	v, err := d.Dimension.Parse(text)
 	if err != nil {
 		what, remedy := refusal(err)
-		b.fault(Quantity, n.place, d.Path, quote(brief(text))+": "+what, remedy)
+		b.fault(Quantity, n.place, d.Path, n.shown()+": "+what, remedy)
 		return
 	}
-	value.SetFloat(v)
-	b.within(n, d, v)
+	if b.within(n, d, v) {
+		value.SetFloat(v)
+	}
 }
 
 // notText answers a bare number, and whatever else stands where a quantity is wanted.
@@ -126,7 +128,7 @@ func (b *binder) notText(n *node, d Declared) {
 	}
 	_, err := d.Dimension.Parse(fmt.Sprint(n.value)) // refused for want of a unit
 	what, remedy := refusal(err)
-	b.fault(Quantity, n.place, d.Path, brief(n.raw)+": "+what, remedy)
+	b.fault(Quantity, n.place, d.Path, n.shown()+": "+what, remedy)
 }
 
 // refusal takes the refusal of a quantity apart.
@@ -140,34 +142,28 @@ func refusal(err error) (what, remedy string) {
 
 func (b *binder) text(n *node, d Declared, value reflect.Value) {
 	v, ok := n.value.(string)
-	if !ok {
+	switch length := utf8.RuneCountInString(v); {
+	case !ok:
 		b.wrongType(n, d)
-		return
-	}
-	value.SetString(v)
-	switch {
-	case len(d.Words) > 0:
+	case len(d.Words) > 0 && !slices.Contains(d.Words, v):
 		b.word(n, d, v)
 	case strings.TrimSpace(v) == "":
 		b.fault(Text, n.place, d.Path, "an empty text", "leave the key out, or write "+d.Sample())
-	case utf8.RuneCountInString(v) > longestText:
-		b.fault(Text, n.place, d.Path, fmt.Sprintf("a text of %d characters", utf8.RuneCountInString(v)), fmt.Sprintf("at most %d", longestText))
+	case length > longestText:
+		b.fault(Text, n.place, d.Path, fmt.Sprintf("a text of %d characters", length), fmt.Sprintf("at most %d", longestText))
 	case strings.ContainsFunc(v, unicode.IsControl):
 		b.fault(Text, n.place, d.Path, "a text with line breaks or other control characters", "write it on one line")
+	default:
+		value.SetString(v)
 	}
 }
 
 func (b *binder) word(n *node, d Declared, v string) {
-	for _, w := range d.Words {
-		if v == w {
-			return
-		}
-	}
 	remedy := d.Accepts()
 	if near, ok := Nearest(v, d.Words); ok {
 		remedy = fmt.Sprintf("was %q meant? %s", near, remedy)
 	}
-	b.fault(Word, n.place, d.Path, quote(brief(v))+" is not an accepted word", remedy)
+	b.fault(Word, n.place, d.Path, n.shown()+" is not an accepted word", remedy)
 }
 
 func (b *binder) whole(n *node, d Declared, value reflect.Value) {
@@ -176,8 +172,9 @@ func (b *binder) whole(n *node, d Declared, value reflect.Value) {
 		b.wrongType(n, d)
 		return
 	}
-	value.SetInt(v)
-	b.within(n, d, float64(v))
+	if b.within(n, d, float64(v)) {
+		value.SetInt(v)
+	}
 }
 
 func (b *binder) number(n *node, d Declared, value reflect.Value) {
@@ -192,17 +189,21 @@ func (b *binder) number(n *node, d Declared, value reflect.Value) {
 		return
 	}
 	if math.IsNaN(v) || math.IsInf(v, 0) {
-		b.fault(Quantity, n.place, d.Path, brief(n.raw)+" is not a finite number", "write a number, as in "+d.Sample())
+		b.fault(Quantity, n.place, d.Path, n.shown()+" is not a finite number", "write a number, as in "+d.Sample())
 		return
 	}
-	value.SetFloat(v)
-	b.within(n, d, v)
+	if b.within(n, d, v) {
+		value.SetFloat(v)
+	}
 }
 
-func (b *binder) within(n *node, d Declared, v float64) {
-	if !d.bounds.holds(v) {
-		b.fault(Range, n.place, d.Path, brief(n.raw)+" is out of range", d.Accepts())
+// within reports whether a number lies in the declared range, and the fault where not.
+func (b *binder) within(n *node, d Declared, v float64) bool {
+	inside := d.bounds.holds(v)
+	if !inside {
+		b.fault(Range, n.place, d.Path, n.shown()+" is out of range", d.Accepts())
 	}
+	return inside
 }
 
 func (b *binder) wrongType(n *node, d Declared) {
@@ -248,15 +249,23 @@ func describeNode(n *node) string {
 	}
 	switch v := n.value.(type) {
 	case string:
-		return "text " + quote(brief(v))
-	case bool:
-		return n.raw
+		return "text " + n.shown()
 	case time.Time:
 		return "a date or time"
+	case int64:
+		return "the number " + n.shown()
 	case float64:
-		if math.IsNaN(v) || math.IsInf(v, 0) {
-			return n.raw
+		if !math.IsNaN(v) && !math.IsInf(v, 0) {
+			return "the number " + n.shown()
 		}
 	}
-	return "the number " + brief(n.raw)
+	return n.shown()
+}
+
+// shown is a value as a message repeats it, on one line.
+func (n *node) shown() string {
+	if text, ok := n.value.(string); ok {
+		return strconv.Quote(brief(text))
+	}
+	return brief(n.raw)
 }

@@ -3,7 +3,9 @@ package document
 import (
 	"fmt"
 	"slices"
+	"strconv"
 	"strings"
+	"unicode"
 )
 
 // nodeKind is what stands at a key.
@@ -89,7 +91,7 @@ func (g *grower) run(all []statement) {
 }
 
 func (g *grower) fault(code Code, at Place, path []string, what, remedy string) {
-	g.faults = append(g.faults, Fault{Code: code, Key: strings.Join(path, "."), Line: at.Line, Column: at.Column, What: what, Remedy: remedy})
+	g.faults = append(g.faults, Fault{Code: code, Key: pathText(path), Line: at.Line, Column: at.Column, What: what, Remedy: remedy})
 }
 
 func (g *grower) statement(st statement) {
@@ -235,6 +237,18 @@ func (g *grower) under(path []string) []string {
 
 func (g *grower) twice(at Place, path []string, first *node) {
 	g.fault(Twice, at, path, "given a second time", fmt.Sprintf("keep one; the first is on line %d", first.place.Line))
+}
+
+// pathText writes a path for a message; what is no plain key stands in quotes.
+func pathText(path []string) string {
+	parts := slices.Clone(path)
+	for i, part := range parts {
+		if strings.ContainsFunc(part, func(r rune) bool { return !unicode.IsPrint(r) }) {
+			parts[i] = strconv.Quote(part)
+		}
+		parts[i] = brief(parts[i])
+	}
+	return strings.Join(parts, ".")
 }
 
 func lookUp(values map[string]any, path []string) any {

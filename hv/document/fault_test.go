@@ -202,6 +202,7 @@ earthed = maybe      # FAULT 11 syntax: maybe stands without quotes
 [room                # FAULT 1 syntax: room: this header cannot be read; write [table] or [[table]]
 height = "3"         # FAULT 10 quantity: room.height: "3": a number without a unit
 `,
+	"tabs": "name = a\tb # FAULT 8 syntax: a b stands without quotes; write \"a b\"",
 	"nesting": `name = "x"
 shelf = [[[[[[[[[[[[[[[1]]]]]]]]]]]]]]] # FAULT 1 nesting: shelf: nested too deeply; at most 12 tables or lists within each other
 `,

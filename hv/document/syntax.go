@@ -4,6 +4,7 @@ import (
 	"fmt"
 	"regexp"
 	"strings"
+	"unicode"
 
 	"github.com/BurntSushi/toml"
 )
@@ -153,11 +154,17 @@ func closing(opener byte) string {
 	return "}"
 }
 
-// brief shortens what a message repeats of the input.
+// brief shortens what a message repeats of the input, and keeps it on one line.
 func brief(s string) string {
 	const most = 40
-	if runes := []rune(s); len(runes) > most {
+	runes := []rune(s)
+	for i, r := range runes {
+		if unicode.IsControl(r) {
+			runes[i] = ' '
+		}
+	}
+	if len(runes) > most {
 		return string(runes[:most]) + "…"
 	}
-	return s
+	return string(runes)
 }

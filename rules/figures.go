@@ -1,6 +1,7 @@
 package rules
 
 import (
+	"kilovet/hv/circuit"
 	"kilovet/rules/evidence"
 	"kilovet/rules/figure"
 )
@@ -13,6 +14,7 @@ func figures(e *evidence.Evidence) []figure.Figure {
 			c.state = state
 			in := e.In(state)
 			potentials(c, in)
+			bearing(c, in)
 			multiplier(c, in)
 			output(c, in)
 			divider(c, in)
@@ -33,6 +35,24 @@ func potentials(c *collector, e *evidence.Evidence) {
 	for _, node := range e.Chain().Nodes() {
 		v, err := e.Potential(node)
 		add(c, "potential", node, e.Basis(), v, err)
+	}
+}
+
+// bearing lists what every resistor and load bears.
+func bearing(c *collector, e *evidence.Evidence) {
+	basis := e.Basis()
+	for _, el := range e.Layout().Elements {
+		if el.Kind != circuit.Resistor && el.Kind != circuit.Sink || el.Role == circuit.Ladder {
+			continue
+		}
+		v, err := e.ElementPeak(el.Name)
+		add(c, "part.voltage", el.Name, basis, v, err)
+		i, err := e.ElementCurrent(el.Name)
+		add(c, "part.current", el.Name, basis, i, err)
+		if el.Kind == circuit.Resistor {
+			p, err := e.ElementPower(el.Name)
+			add(c, "part.power", el.Name, basis, p, err)
+		}
 	}
 }
 

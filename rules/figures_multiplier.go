@@ -62,7 +62,23 @@ func stored(c *collector, e *evidence.Evidence) {
 			add(c, "stored.discharge_time", node, basis, d.Time, err)
 		}
 	}
+	if c.state == evidence.Lost {
+		left(c, e)
+	}
 	if d, err := e.SlowestDischarge(); !d.Never {
 		add(c, "stored.discharge_time", "", basis, d.Time, err)
+	}
+}
+
+// left lists what stays charged with one part open.
+func left(c *collector, e *evidence.Evidence) {
+	opened, err := e.OneOpen()
+	if err != nil {
+		return
+	}
+	for _, o := range opened {
+		if o.Worst.Never {
+			add(c, "stored.left", o.Part, "hv.steady", o.Worst.Left, nil)
+		}
 	}
 }

@@ -186,6 +186,32 @@ func (e *Evidence) SlowestDischarge() (Discharge, error) {
 	return discharge(d.Slowest()), nil
 }
 
+// Opened is what stays with one part open.
+type Opened struct {
+	Part  string
+	Worst Discharge
+}
+
+// OneOpen is the discharge with each diode and each permanent resistor open in turn.
+func (e *Evidence) OneOpen() ([]Opened, error) {
+	return remember(e, "one open", func() ([]Opened, error) {
+		c, err := e.Circuit()
+		if err != nil {
+			return nil, err
+		}
+		v, err := e.means()
+		if err != nil {
+			return nil, err
+		}
+		all, err := steady.DischargeWithOneOpen(c, v, discharged)
+		var opened []Opened
+		for _, o := range all {
+			opened = append(opened, Opened{o.Element, discharge(o.Slowest)})
+		}
+		return opened, err
+	})
+}
+
 // Residue is what an intact ladder keeps when its top is discharged.
 func (e *Evidence) Residue() (quantity.Voltage, error) { return steady.Residue(e.chain.Multiplier) }
 

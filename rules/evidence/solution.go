@@ -2,6 +2,7 @@ package evidence
 
 import (
 	"kilovet/hv/circuit"
+	"kilovet/hv/lack"
 	"kilovet/hv/quantity"
 )
 
@@ -87,6 +88,24 @@ func (e *Evidence) span(a, b string) (span, error) {
 func (e *Evidence) ElementPeak(name string) (quantity.Voltage, error) {
 	from, to := e.Layout().Element(name).Ends()
 	return e.Between(from, to)
+}
+
+// ElementCurrent is the magnitude of the mean current through a resistor or load.
+func (e *Evidence) ElementCurrent(name string) (quantity.Current, error) {
+	c, err := e.Circuit()
+	if err != nil {
+		return 0, err
+	}
+	el := c.Element(name)
+	if el == nil {
+		return 0, lack.Failed("there is no %s", name)
+	}
+	if el.Kind == circuit.Sink {
+		return el.Current, nil
+	}
+	from, to := el.Ends()
+	s, err := e.span(from, to)
+	return quantity.Current(float64(magnitude(s.mean)) / float64(el.Resistance)), err
 }
 
 // ElementPower is the mean power a resistor turns into heat.

@@ -26,6 +26,10 @@ func Find(id string) Declaration {
 var List = []Declaration{
 	{"potential", "V", true, "mean potential to ground over a drive period", "node"},
 
+	{"part.voltage", "V", true, "largest voltage across a part over a drive period", "part"},
+	{"part.current", "A", true, "mean current through a resistor or load", "part"},
+	{"part.power", "W", true, "mean power in a resistor, all elements", "part"},
+
 	{"multiplier.no_load", "V", true, "2 N (peak − forward drop)", ""},
 	{"multiplier.mean", "V", true, "mean at the top of the smoothing column", ""},
 	{"multiplier.maximum", "V", true, "largest magnitude at the top of the smoothing column", ""},
@@ -86,6 +90,7 @@ var List = []Declaration{
 	{"stored.charge", "C", true, "charge that a short delivers", "node"},
 	{"stored.energy_released", "J", true, "stored energy that a short sets free", "node"},
 	{"stored.discharge_time", "s", true, "from switching off to 60 V through what is permanent", "node"},
+	{"stored.left", "V", true, "largest voltage that stays on a node with one part open", "part"},
 	{"stored.residue", "V", false, "what an intact ladder keeps: (2 N − 1) forward drops", ""},
 
 	{"spacing.voltage", "V", false, "highest voltage across the spacing, peak", "spacing"},

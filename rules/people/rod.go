@@ -19,6 +19,8 @@ var rod = rule.Rule{
 		Swaps: []rule.Swap{{Was: `earthing_rod    = { resistance = "100 kohm", rated_voltage = "50 kV", rated_energy = "20 J" }`, Becomes: ""}},
 		Changes: []rule.Change{
 			{Rule: "rod.there", Subject: "chain", Verdict: rule.Fails},
+			{Rule: "discharge.one_open", Subject: "chain", Verdict: rule.Fails},
+			{Rule: "discharge.residue", Subject: "chain", Verdict: rule.Fails},
 			{Rule: "rod.voltage", Subject: "earthing rod"},
 			{Rule: "rod.energy", Subject: "earthing rod"},
 		},
@@ -36,6 +38,90 @@ var rod = rule.Rule{
 		}
 		return *only(f.There(access.EarthingRod != nil).WithoutRemedyIfMet())
 	},
+}
+
+var oneOpen = rule.Rule{
+	ID: "discharge.one_open", Title: "Charge left by one open part",
+	Demands: "With any one diode or permanent resistor open nothing stays above 60 V, or a rod reaches every node.",
+	Applies: "Where a node holds more charge or energy than may be touched.",
+	Margin:  "marginal where something stays and a rod is described",
+	Concern: rule.Life,
+	Sources: []rule.Source{limits.RodSource},
+	Example: rule.Example{
+		Swaps: []rule.Swap{{Was: `earthing_rod    = { resistance = "100 kohm", rated_voltage = "50 kV", rated_energy = "20 J" }`, Becomes: ""}},
+		Changes: []rule.Change{
+			{Rule: "rod.there", Subject: "chain", Verdict: rule.Fails},
+			{Rule: "discharge.one_open", Subject: "chain", Verdict: rule.Fails},
+			{Rule: "discharge.residue", Subject: "chain", Verdict: rule.Fails},
+			{Rule: "rod.voltage", Subject: "earthing rod"},
+			{Rule: "rod.energy", Subject: "earthing rod"},
+		},
+	},
+	Judge: judgeOneOpen,
+}
+
+func judgeOneOpen(e *evidence.Evidence) rule.Judgement {
+	f := rule.Finding{Rule: "discharge.one_open", Subject: "chain", Concern: rule.Life, Relation: rule.Presence, Sources: []rule.Source{limits.RodSource}}
+	access, done := needsCare(e, f)
+	if done != nil {
+		return *done
+	}
+	f.Place = access.Here()
+	opened, err := e.In(evidence.Lost).OneOpen()
+	if err != nil {
+		return *only(f.Lacking(err))
+	}
+	stays, worst := 0, evidence.Opened{}
+	for _, o := range opened {
+		if o.Worst.Never {
+			stays++
+			if o.Worst.Slower(worst.Worst) {
+				worst = o
+			}
+		}
+	}
+	f.Under = string(evidence.Lost)
+	if stays == 0 {
+		f.Because = fmt.Sprintf("none of %d parts, open alone, leaves a node above 60 V", len(opened))
+		return *only(f.There(true))
+	}
+	f.Because = fmt.Sprintf("%d of %d parts, open alone, leave a node charged; with %s open %s stays at %s", stays, len(opened), worst.Part, worst.Worst.Node, quantity.Text(worst.Worst.Left))
+	f.Remedy = "discharge every column node, filter, output and cathode with the rod, one by one, whatever a meter says"
+	return *only(f.There(access.EarthingRod != nil).Assume("a rod is put to every node before anything is touched"))
+}
+
+var residue = rule.Rule{
+	ID: "discharge.residue", Title: "Residue of an intact ladder",
+	Demands: "What an intact ladder keeps behind its diodes is at or below 60 V, or a rod reaches every column node.",
+	Applies: "Where a node holds more charge or energy than may be touched.",
+	Margin:  "marginal above 60 V where a rod is described",
+	Concern: rule.Life,
+	Sources: []rule.Source{limits.TouchVoltageSource, limits.RodSource},
+	Example: rule.Example{
+		Swaps:   []rule.Swap{{Was: `forward_drop = "12 V"`, Becomes: `forward_drop = "4 V"`}},
+		Changes: []rule.Change{{Rule: "discharge.residue", Subject: "chain", Verdict: rule.Meets}},
+	},
+	Judge: judgeResidue,
+}
+
+func judgeResidue(e *evidence.Evidence) rule.Judgement {
+	f := rule.Finding{Rule: "discharge.residue", Subject: "chain", Concern: rule.Life, Relation: rule.AtMost, Sources: []rule.Source{limits.TouchVoltageSource, limits.RodSource}}
+	access, done := needsCare(e, f)
+	if done != nil {
+		return *done
+	}
+	f.Place = access.Here()
+	left, err := e.Residue()
+	if err != nil {
+		return *only(f.Lacking(err))
+	}
+	f.Because = fmt.Sprintf("the diodes of the intact ladder hold back up to %s", quantity.Text(left))
+	f.Remedy = "put the rod to every column node"
+	f = f.Most(rule.Of(left), rule.Of(limits.TouchVoltage), 0)
+	if f.Verdict == rule.Fails && access.EarthingRod != nil {
+		f.Verdict = rule.Marginal
+	}
+	return *only(f.WithoutRemedyIfMet())
 }
 
 var rodVoltage = rule.Rule{

@@ -20,6 +20,9 @@ func TestMain(m *testing.M) { testscript.Main(m, map[string]func(){"kilovet": ma
 // Every script finds two descriptions in its folder: the built-in one as
 // column.toml and, where any will do, a single spacing as gap.toml.
 func TestScripts(t *testing.T) {
+	if testing.Short() {
+		t.Skip("starts the program many times")
+	}
 	testscript.Run(t, testscript.Params{
 		Dir:                 "testdata/script",
 		RequireExplicitExec: true,

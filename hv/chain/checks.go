@@ -2,6 +2,7 @@ package chain
 
 import (
 	"fmt"
+	"slices"
 	"strings"
 
 	"kilovet/hv/document"
@@ -42,7 +43,7 @@ func checkMultiplier(s *survey) {
 		}
 		return
 	}
-	if !s.without(false) {
+	if !s.legible {
 		return
 	}
 	for _, place := range s.hangingOn() {
@@ -52,32 +53,29 @@ func checkMultiplier(s *survey) {
 
 // hangingOn lists the tables that make no sense without a multiplier.
 func (s *survey) hangingOn() []document.Place {
-	var places []document.Place
-	for i := range s.Filters {
-		places = append(places, s.Filters[i].Here())
-	}
-	for i := range s.Loads {
-		places = append(places, s.Loads[i].Here())
-	}
-	for i := range s.Bleeders {
-		places = append(places, s.Bleeders[i].Here())
-	}
-	for _, single := range []struct {
-		there bool
-		place func() document.Place
-	}{
-		{s.Regulation != nil, func() document.Place { return s.Regulation.Here() }},
-		{s.Cable != nil, func() document.Place { return s.Cable.Here() }},
-		{s.Divider != nil, func() document.Place { return s.Divider.Here() }},
-		{s.Bias != nil, func() document.Place { return s.Bias.Here() }},
-		{s.Gun != nil, func() document.Place { return s.Gun.Here() }},
-		{s.Heater != nil, func() document.Place { return s.Heater.Here() }},
-	} {
-		if single.there {
-			places = append(places, single.place())
-		}
+	return slices.Concat(each(s.Filters), each(s.Loads), each(s.Bleeders), one(s.Regulation),
+		one(s.Cable), one(s.Divider), one(s.Bias), one(s.Gun), one(s.Heater))
+}
+
+// placed is a table of the description.
+type placed[T any] interface {
+	*T
+	Here() document.Place
+}
+
+func each[T any, P placed[T]](tables []T) []document.Place {
+	places := make([]document.Place, len(tables))
+	for i := range tables {
+		places[i] = P(&tables[i]).Here()
 	}
 	return places
+}
+
+func one[T any, P placed[T]](table P) []document.Place {
+	if table == nil {
+		return nil
+	}
+	return []document.Place{table.Here()}
 }
 
 // checkStages counts lists of capacitances; outside the multiplier a capacitor has one value.
@@ -176,7 +174,7 @@ func checkHeater(s *survey) {
 	if h == nil || h.Supply.V != "ac" || !s.lacks(h.Frequency.Place) {
 		return
 	}
-	if s.Site == nil && s.without(false) || s.Site != nil && s.lacks(s.Site.MainsFrequency.Place) {
+	if s.Site == nil && s.legible || s.Site != nil && s.lacks(s.Site.MainsFrequency.Place) {
 		s.fault(h.Supply.Place, "an AC heater of unknown frequency", "give frequency here or mains_frequency in [site]")
 	}
 }

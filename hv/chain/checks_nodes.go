@@ -83,27 +83,39 @@ func (s *survey) uncounted(name string) bool {
 	return (family == "stage" || family == "coupling") && s.Multiplier != nil && !s.sound(s.Multiplier.Stages.Place)
 }
 
-// newNodes judges the names that loose parts give to new nodes: none may pass for
-// a node that could exist in another chain, or differ by case alone from one that does.
+// newNodes judges the ends of loose parts that are no nodes of the chain without them.
 func (s *survey) newNodes() {
 	fixed := s.fixedNodes()
+	uses := map[string]int{}
+	for i := range s.Parts {
+		uses[s.Parts[i].From.V]++
+		uses[s.Parts[i].To.V]++
+	}
 	for i := range s.Parts {
 		p := &s.Parts[i]
 		if p.From.V == p.To.V && s.sound(p.To.Place) {
 			s.fault(p.To.Place, "both ends on the same node", "name the node of the other end")
 		}
 		for _, end := range []document.Given[string]{p.From, p.To} {
-			if !s.sound(end.Place) || slices.Contains(fixed, end.V) {
-				continue
-			}
-			near, ok := document.Nearest(end.V, fixed)
-			switch {
-			case ok && strings.EqualFold(near, end.V):
-				s.fault(end.Place, quoted(end.V)+" differs by upper and lower case only from a node", "write "+quoted(near))
-			case reserved(end.V) && s.legible && !s.uncounted(end.V):
-				s.fault(end.Place, quoted(end.V)+" is no node of this chain, and the name is kept for one", oneOf("node", "", end.V, fixed))
+			if s.sound(end.Place) && !slices.Contains(fixed, end.V) {
+				s.newNode(end, fixed, uses[end.V])
 			}
 		}
+	}
+}
+
+// newNode judges a name that makes a new node: it must not pass for a node that
+// other chains have, nor be one of this chain's with a slip of the pen. Such a slip
+// is taken for a name where more than one part bears it.
+func (s *survey) newNode(end document.Given[string], fixed []string, uses int) {
+	near, ok := document.Nearest(end.V, fixed)
+	switch {
+	case ok && strings.EqualFold(near, end.V):
+		s.fault(end.Place, quoted(end.V)+" differs by upper and lower case only from a node", "write "+quoted(near))
+	case reserved(end.V) && s.legible && !s.uncounted(end.V):
+		s.fault(end.Place, quoted(end.V)+" is no node of this chain, and the name is kept for one", oneOf("node", "", end.V, fixed))
+	case ok && uses == 1 && document.Slips(near, end.V) == 1:
+		s.fault(end.Place, quoted(end.V)+" is no node but nearly one, and no other part is on it", "write "+quoted(near)+", or choose a name that is less alike")
 	}
 }
 
@@ -128,7 +140,6 @@ func checkNames(s *survey) {
 	s.distinct("field", names(s.Fields, func(f *Field) document.Given[string] { return f.Name }))
 	for i := range s.Fields {
 		s.distinct("probe", names(s.Fields[i].Probes, func(p *Probe) document.Given[string] { return p.Name }))
-		s.distinct("dielectric", names(s.Fields[i].Dielectrics, func(d *Dielectric) document.Given[string] { return d.Name }))
 	}
 	for _, p := range parts {
 		if s.sound(p.Place) && s.nodes[p.V] {

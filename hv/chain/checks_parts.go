@@ -21,10 +21,10 @@ func (s *survey) partValue(p *Part) {
 	d := p.Dimension()
 	switch {
 	case d == nil && p.Value.Set():
-		s.fault(p.Value.Place, a(p.Kind.V)+" has no value", "leave it out")
+		s.fault(p.Value.Place, withArticle(p.Kind.V)+" has no value", "leave it out")
 	case d == nil || !s.sound(p.Value.Place):
 		if d != nil && s.lacks(p.Value.Place) {
-			s.fault(p.Here(), a(p.Kind.V)+" without a value", "give its "+d.Name+", as in value = "+quoted(d.Example))
+			s.fault(p.Here(), withArticle(p.Kind.V)+" without a value", "give its "+d.Name+", as in value = "+quoted(d.Example))
 		}
 	default:
 		s.partAmount(p, d)
@@ -49,7 +49,7 @@ func (s *survey) partKeys(p *Part) {
 		s.fault(p.Here(), "a meter without a resistance", `give resistance, as in resistance = "10 Mohm"`)
 	}
 	if p.Resistance.Set() && kind != "meter" && kind != "diode" {
-		s.fault(p.Resistance.Place, a(kind)+" has no such key", "its value is given by value")
+		s.fault(p.Resistance.Place, withArticle(kind)+" has no such key", "its value is given by value")
 	}
 	if kind == "diode" {
 		return

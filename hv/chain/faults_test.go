@@ -331,6 +331,18 @@ kind = "resistor"
 from = "cathode"
 to = "cathode"         # FAULT 6 node: part.to: both ends on the same node
 value = "1 kohm"
+[[part]]
+name = "e"
+kind = "resistor"
+from = "ouput"         # FAULT 8 node: part.from: "ouput" is no node but nearly one, and no other part is on it; write "output"
+to = "output2"
+value = "1 kohm"
+[[part]]
+name = "f"
+kind = "resistor"
+from = "output2"
+to = "ground"
+value = "1 kohm"
 `,
 	"sensed node": `format = 1
 [drive]

@@ -59,7 +59,7 @@ func (c *Chain) columnNodes() []string {
 		nodes = append(nodes, "drive.a", "drive.b")
 	}
 	nodes = append(nodes, "foot")
-	for k := 1; k <= min(m.Stages.V, mostStages); k++ {
+	for k := 1; k <= m.Stages.V; k++ {
 		for _, column := range columns {
 			nodes = append(nodes, fmt.Sprintf("%s.%d", column, k))
 		}
@@ -67,9 +67,3 @@ func (c *Chain) columnNodes() []string {
 	}
 	return append(nodes, "multiplier")
 }
-
-// mostStages bounds what an absurd number of stages, refused in reading, can cost.
-const mostStages = 1000
-
-// HasCathode reports whether the chain ends at a cathode.
-func (c *Chain) HasCathode() bool { return c.Bias != nil || c.Gun != nil || c.Heater != nil }

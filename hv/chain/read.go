@@ -83,8 +83,8 @@ func (s *survey) without(given bool) bool { return !given && s.legible }
 // lacks is without for a leaf.
 func (s *survey) lacks(at document.Place) bool { return s.without(at.Line > 0) }
 
-// a puts the article before a word.
-func a(word string) string {
+// withArticle puts the article before a word.
+func withArticle(word string) string {
 	if strings.ContainsAny(word[:1], "aeio") {
 		return "an " + word
 	}

@@ -39,8 +39,11 @@ func distance(word, candidate string) float64 {
 	return float64(slips([]rune(w), []rune(c))) / float64(allowed)
 }
 
-// slips counts the letters dropped, added, replaced or swapped with a neighbour
-// between two words (restricted Damerau-Levenshtein distance).
+// Slips counts the letters dropped, added, replaced or swapped with a neighbour
+// between two words.
+func Slips(a, b string) int { return slips([]rune(a), []rune(b)) }
+
+// slips is Slips (restricted Damerau-Levenshtein distance).
 func slips(a, b []rune) int {
 	before, last, row := make([]int, len(b)+1), make([]int, len(b)+1), make([]int, len(b)+1)
 	for j := range last {

@@ -4,8 +4,8 @@ import "strings"
 
 // The scanner finds where everything stands. It takes the text apart into
 // statements (a header or a key with its value) and their values into elements, by
-// brackets and quotes alone; what each means is left to the TOML library, which is
-// handed one statement at a time. So one broken statement hides no other.
+// brackets and quotes alone; what each means is left to the TOML library, which can
+// then be handed one statement at a time. So one broken statement hides no other.
 
 // deepest is how far tables and lists may stand within each other.
 const deepest = 12

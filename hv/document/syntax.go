@@ -9,7 +9,7 @@ import (
 	"github.com/BurntSushi/toml"
 )
 
-// decoded is one statement as the TOML library reads it: every key of it in
+// decoded is what the TOML library reads in some statements: every key of them in
 // document order, with its whole path, and the values.
 type decoded struct {
 	keys   []toml.Key

@@ -239,7 +239,7 @@ func (g *grower) twice(at Place, path []string, first *node) {
 	g.fault(Twice, at, path, "given a second time", fmt.Sprintf("keep one; the first is on line %d", first.place.Line))
 }
 
-// pathText writes a path for a message; what is no plain key stands in quotes.
+// pathText writes a path for a message; what cannot be printed stands in quotes, escaped.
 func pathText(path []string) string {
 	parts := slices.Clone(path)
 	for i, part := range parts {

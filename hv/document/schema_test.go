@@ -1,0 +1,282 @@
+package document_test
+
+import (
+	"bytes"
+	"encoding/json"
+	"os"
+	"path/filepath"
+	"reflect"
+	"regexp"
+	"slices"
+	"strings"
+	"testing"
+
+	"github.com/santhosh-tekuri/jsonschema/v6"
+	"pgregory.net/rapid"
+
+	"kilovet/hv/chain"
+	"kilovet/hv/document"
+	"kilovet/hv/quantity"
+)
+
+// structural are the faults that a schema can see: those of one key by itself, apart
+// from ranges of quantities.
+var structural = []document.Code{document.Unknown, document.Form, document.Type, document.Quantity, document.Word, document.Text, document.Length, document.Missing}
+
+// schemaOf compiles the schema of a struct, with its own patterns.
+func schemaOf(t testing.TB, into any) *jsonschema.Schema {
+	t.Helper()
+	var out bytes.Buffer
+	if err := document.Schema(&out, into, document.SchemaHead{ID: "urn:test", Title: "test", Means: "a test"}); err != nil {
+		t.Fatal(err)
+	}
+	schema, err := jsonschema.UnmarshalJSON(&out)
+	if err != nil {
+		t.Fatal(err)
+	}
+	compiler := jsonschema.NewCompiler()
+	compiler.AssertFormat()
+	if err := compiler.AddResource("urn:test", schema); err != nil {
+		t.Fatal(err)
+	}
+	compiled, err := compiler.Compile("urn:test")
+	if err != nil {
+		t.Fatal(err)
+	}
+	return compiled
+}
+
+// asJSON is a TOML text as a program that writes JSON would give it.
+func asJSON(t testing.TB, text string) any {
+	t.Helper()
+	values, read := document.Plain(text)
+	data, err := json.Marshal(values)
+	if err != nil || !read {
+		t.Fatalf("%q: %v", text, err)
+	}
+	back, err := jsonschema.UnmarshalJSON(bytes.NewReader(data))
+	if err != nil {
+		t.Fatal(err)
+	}
+	return back
+}
+
+func TestSchemaTakesEveryChain(t *testing.T) {
+	schema := schemaOf(t, &chain.Chain{})
+	files, err := filepath.Glob("../../testdata/chains/*.toml")
+	if err != nil || len(files) < 5 {
+		t.Fatalf("%v: %v", files, err)
+	}
+	for _, file := range files {
+		data, err := os.ReadFile(file)
+		if err != nil {
+			t.Fatal(err)
+		}
+		if err := schema.Validate(asJSON(t, string(data))); err != nil {
+			t.Errorf("%s: %v", file, err)
+		}
+	}
+}
+
+func TestSchemaTakesTheDraft(t *testing.T) {
+	var draft bytes.Buffer
+	if err := chain.Draft(&draft); err != nil {
+		t.Fatal(err)
+	}
+	if err := schemaOf(t, &chain.Chain{}).Validate(asJSON(t, draft.String())); err != nil {
+		t.Error(err)
+	}
+}
+
+// Every key of every table is tried with its example and with values of other kinds:
+// the schema refuses exactly what the reader refuses by the key's own form.
+func TestSchemaRefusesWhatTheReaderRefuses(t *testing.T) {
+	schema := schemaOf(t, &chain.Chain{})
+	tried := 0
+	for _, d := range document.Describe(&chain.Chain{}) {
+		values := []string{`"furlong"`, `"3 furlong"`, `"1 kV"`, `"2 mm"`, `"1"`, `" "`, `""`, "7", "1.5", "true", "[]", `["1 kV"]`, `["a", "b", "c"]`, "[1, 2]", "{}", "[{}]", "{ furlong = 1 }", `["1 m", "2 m"]`}
+		if d.Example != "" {
+			values = append(values, d.Sample(), "["+d.Sample()+"]", "["+d.Sample()+", "+d.Sample()+"]")
+		}
+		for _, value := range values {
+			text := at(d.Path, value)
+			judge(t, schema, text)
+			tried++
+		}
+	}
+	if tried < 5000 {
+		t.Errorf("only %d values tried", tried)
+	}
+}
+
+// judge fails where reader and schema disagree about the form of a description.
+func judge(t testing.TB, schema *jsonschema.Schema, text string) {
+	t.Helper()
+	var c chain.Chain
+	faults := document.Read([]byte(text), &c)
+	want := slices.ContainsFunc(faults, func(f document.Fault) bool { return slices.Contains(structural, f.Code) })
+	also := slices.ContainsFunc(faults, func(f document.Fault) bool { return f.Code == document.Range }) // numbers, not quantities
+	err := schema.Validate(asJSON(t, text))
+	if want && err == nil || err != nil && !want && !also {
+		t.Errorf("%s\nreader: %v\nschema: %v", text, faults, err)
+	}
+}
+
+// at is a description that holds one value at a path; tables of which there can be
+// several are lists of one, and nothing else that is needed is there.
+func at(path, value string) string {
+	tables := map[string]bool{}
+	for _, d := range document.Describe(&chain.Chain{}) {
+		if d.Holds == document.SomeTables {
+			tables[d.Path] = true
+		}
+	}
+	for i := strings.LastIndexByte(path, '.'); i >= 0; i = strings.LastIndexByte(path, '.') {
+		value = "{ " + path[i+1:] + " = " + value + " }"
+		if path = path[:i]; tables[path] {
+			value = "[" + value + "]"
+		}
+	}
+	return path + " = " + value + "\n"
+}
+
+func TestSchemaKnowsRangesOfPureNumbers(t *testing.T) {
+	schema := schemaOf(t, &bench{})
+	for text, fine := range map[string]bool{
+		"stages = 1": true, "stages = 60": true, "stages = 0": false, "stages = 61": false, "stages = 1.5": false,
+		"exponent = 0.1": true, "exponent = 0": false, "exponent = 9": false, "exponent = 8": true,
+	} {
+		err := schema.Validate(asJSON(t, "name = 'x'\n[supply]\npeak = '1 V'\n"+text+"\n"))
+		if (err == nil) != fine {
+			t.Errorf("%s: %v", text, err)
+		}
+	}
+}
+
+// A needed key makes its table useless without it, so in the sound description above
+// each may be left out but the needed ones.
+func TestSchemaAsksForWhatIsNeeded(t *testing.T) {
+	schema := schemaOf(t, &bench{})
+	sound := asJSON(t, faulty["sound"])
+	if err := schema.Validate(sound); err != nil {
+		t.Fatal(err)
+	}
+	for _, key := range []string{"name", "shelf", "supply"} {
+		whole, _ := document.Plain(faulty["sound"])
+		delete(whole.(map[string]any), key)
+		data, _ := json.Marshal(whole)
+		back, _ := jsonschema.UnmarshalJSON(bytes.NewReader(data))
+		if err := schema.Validate(back); (err == nil) != (key != "name") {
+			t.Errorf("without %s: %v", key, err)
+		}
+	}
+}
+
+// dimensions are those of the description.
+func dimensions() []*quantity.Dimension {
+	var all []*quantity.Dimension
+	for _, d := range document.Describe(&chain.Chain{}) {
+		if d.Dimension != nil && !slices.Contains(all, d.Dimension) {
+			all = append(all, d.Dimension)
+		}
+	}
+	return all
+}
+
+// The pattern takes what the parser takes, but for numbers beyond computing with and
+// temperatures below absolute zero.
+func TestPatternAgreesWithTheParser(t *testing.T) {
+	all := dimensions()
+	patterns := map[*quantity.Dimension]*regexp.Regexp{}
+	var pieces []string
+	for _, d := range all {
+		patterns[d] = regexp.MustCompile(document.UnitPattern(d))
+		pieces = append(pieces, d.Units()...)
+	}
+	pieces = append(pieces, "", " ", "\t", "\u00a0", "\u2009", "\u0085", "1", "0", "12.", ".5", "7.25", "e3", "E-2", "e", "-", "+", "\u2212", ",", "_", "µm", "μA", "MΩ", "k\u2126", "mm²", "kg/m³", "V", "nan", "inf", "\n", "ohm\u00a0m")
+	rapid.Check(t, func(t *rapid.T) {
+		d := rapid.SampledFrom(all).Draw(t, "dimension")
+		text := strings.Join(rapid.SliceOfN(rapid.SampledFrom(append(pieces, d.Units()...)), 1, 6).Draw(t, "pieces"), "")
+		_, err := d.Parse(text)
+		refused := err != nil && !strings.Contains(err.Error(), "to compute with") && !strings.Contains(err.Error(), "absolute zero")
+		if matched := patterns[d].MatchString(text); matched == refused {
+			t.Errorf("%s %q: pattern %t, parser %v", d.Name, text, matched, err)
+		}
+	})
+}
+
+func TestPatternTakesEveryUnit(t *testing.T) {
+	for _, d := range dimensions() {
+		pattern := regexp.MustCompile(document.UnitPattern(d))
+		for _, u := range d.Units() {
+			for text, fine := range map[string]bool{"1.5 " + u: true, " -2e-3 " + u + " ": true, "1.5 " + u + "x": false, u: false, "1,5 " + u: false} {
+				if pattern.MatchString(text) != fine {
+					t.Errorf("%s: %q: want %t", d.Name, text, fine)
+				}
+			}
+		}
+		if pattern.MatchString("15") || pattern.MatchString("0.51") {
+			t.Errorf("%s: a number without a unit passes", d.Name)
+		}
+	}
+}
+
+func TestSchemaRepeats(t *testing.T) {
+	var one, two bytes.Buffer
+	for _, out := range []*bytes.Buffer{&one, &two} {
+		if err := document.Schema(out, &chain.Chain{}, document.SchemaHead{}); err != nil {
+			t.Fatal(err)
+		}
+	}
+	if one.String() != two.String() {
+		t.Error("two schemas of one declaration differ")
+	}
+}
+
+// Every key's description says what it means and every example is one that the
+// schema itself takes, as the reader does.
+func TestSchemaDescribesEveryKey(t *testing.T) {
+	var out bytes.Buffer
+	if err := document.Schema(&out, &chain.Chain{}, document.SchemaHead{}); err != nil {
+		t.Fatal(err)
+	}
+	var schema struct {
+		Properties map[string]described            `json:"properties"`
+		Defs       map[string]map[string]described `json:"-"`
+		Raw        map[string]struct {
+			Properties map[string]described `json:"properties"`
+		} `json:"$defs"`
+	}
+	if err := json.Unmarshal(out.Bytes(), &schema); err != nil {
+		t.Fatal(err)
+	}
+	means := map[string]bool{}
+	for _, d := range document.Describe(&chain.Chain{}) {
+		means[d.Means] = true
+	}
+	found := len(schema.Properties)
+	for name, key := range schema.Properties {
+		check(t, means, name, key)
+	}
+	for table, def := range schema.Raw {
+		found += len(def.Properties)
+		for name, key := range def.Properties {
+			check(t, means, table+"."+name, key)
+		}
+	}
+	if found < reflect.TypeFor[chain.Chain]().NumField() {
+		t.Errorf("only %d keys found", found)
+	}
+}
+
+type described struct{ Description string }
+
+func check(t *testing.T, means map[string]bool, name string, key described) {
+	t.Helper()
+	for m := range means {
+		if strings.HasPrefix(key.Description, m) {
+			return
+		}
+	}
+	t.Errorf("%s: description %q", name, key.Description)
+}

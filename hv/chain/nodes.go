@@ -35,13 +35,13 @@ func (c *Chain) fixedNodes() []string {
 		nodes = append(nodes, "supply", "output")
 	}
 	if c.Bias != nil || c.Gun != nil {
-		nodes = append(nodes, "control", "cathode")
+		nodes = append(nodes, "control")
+	}
+	if c.HasCathode() {
+		nodes = append(nodes, "cathode")
 	}
 	if c.Heater != nil {
 		nodes = append(nodes, "heater.a", "heater.b")
-		if c.Bias == nil && c.Gun == nil {
-			nodes = append(nodes, "cathode")
-		}
 	}
 	if c.Divider != nil {
 		nodes = append(nodes, "divider.tap")
@@ -67,3 +67,6 @@ func (c *Chain) columnNodes() []string {
 	}
 	return append(nodes, "multiplier")
 }
+
+// HasCathode reports whether the chain ends at a cathode.
+func (c *Chain) HasCathode() bool { return c.Bias != nil || c.Gun != nil || c.Heater != nil }

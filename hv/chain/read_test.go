@@ -118,7 +118,7 @@ from = "output"
 to = "gun.inner"
 value = "22 kohm"
 `, "ground mains drive foot coupling.1 stage.1 coupling.2 stage.2 coupling.3 stage.3 multiplier filter.1 filter.2 supply output control cathode heater.a heater.b divider.tap gun.inner"},
-		{"heater on the output", small + "[heater]\n", "ground mains drive foot coupling.1 stage.1 coupling.2 stage.2 coupling.3 stage.3 multiplier supply output heater.a heater.b cathode"},
+		{"heater on the output", small + "[heater]\n", "ground mains drive foot coupling.1 stage.1 coupling.2 stage.2 coupling.3 stage.3 multiplier supply output cathode heater.a heater.b"},
 	} {
 		if got := strings.Join(sound(t, row.text).Nodes(), " "); got != row.want {
 			t.Errorf("%s:\ngot  %s\nwant %s", row.name, got, row.want)

@@ -54,8 +54,8 @@ func Margin(f rule.Finding) string {
 	switch {
 	case f.Margin == nil || math.IsNaN(*f.Margin):
 		return ""
-	case math.IsInf(*f.Margin, 1) || *f.Margin >= 100:
-		return "more than a hundredfold"
+	case *f.Margin >= 9:
+		return "tenfold or more"
 	case *f.Margin > 0:
 		return "+" + percent(*f.Margin)
 	}

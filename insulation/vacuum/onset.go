@@ -1,0 +1,78 @@
+package vacuum
+
+import (
+	"kilovet/hv/quantity"
+	"kilovet/insulation/gap"
+)
+
+// Onset is the voltage at which a vacuum gap begins to carry current: the field at the
+// electrode reaches 10 kV/mm, where smooth surfaces emit measurably, or, in long gaps,
+// the breakdown itself. Without a shape there is a lack.
+func Onset(g gap.Gap) (gap.Answer[quantity.Voltage], error) {
+	x, err := even(g)
+	if err != nil {
+		return gap.Answer[quantity.Voltage]{}, err
+	}
+	breaks := law(x)
+	emits := quantity.Voltage(float64(EmissionField) * float64(x))
+	if emits > breaks.Value {
+		breaks.Because += ", before emission is measurable"
+		return breaks, nil
+	}
+	beta, err := EmissionOnset(smoothBeta)
+	if err != nil {
+		return gap.Answer[quantity.Voltage]{}, err
+	}
+	return gap.Answer[quantity.Voltage]{
+		Value: emits, Because: "cold emission becomes measurable at 10 kV/mm",
+		Sources:     []gap.Source{emissionSource.Governing(), longSource},
+		Assumptions: []string{"the electrodes are smooth to the eye"},
+		Shown:       []gap.Beside[quantity.Voltage]{{Value: quantity.Voltage(float64(beta.Value) * float64(x)), Source: beta.Sources[0]}},
+	}, nil
+}
+
+// ClearanceForOnset is the gap whose onset is at a voltage, sharpest radius kept.
+func ClearanceForOnset(g gap.Gap, v quantity.Voltage) (quantity.Length, error) {
+	return gapOf(g, evenAtOnset(v))
+}
+
+// evenAtOnset is the even length at which emission or breakdown begins at a voltage.
+func evenAtOnset(v quantity.Voltage) quantity.Length {
+	return max(evenAt(v), quantity.Length(float64(v)/float64(EmissionField)))
+}
+
+// ClearanceNeeded is the gap in vacuum at which the peak voltage only just brings no
+// emission and no breakdown, and never under the shortest gap of the laws; no printed
+// table is behind it. Beside it stands the gap at which the electrodes stay comfortable
+// without polish, where there is one.
+func ClearanceNeeded(g gap.Gap, v gap.Voltages) (gap.Answer[quantity.Length], error) {
+	none := gap.Answer[quantity.Length]{}
+	closest, _ := reach(g)
+	at, err := Onset(withGap(g, closest))
+	if err != nil {
+		return none, err
+	}
+	a := gap.Answer[quantity.Length]{Value: closest}
+	if at.Value < v.Peak {
+		if a.Value, err = ClearanceForOnset(g, v.Peak); err != nil {
+			return none, err
+		}
+		if at, err = Onset(withGap(g, a.Value)); err != nil {
+			return none, err
+		}
+	}
+	a.Because, a.Sources, a.Assumptions = quantity.Text(v.Peak)+" peak: "+at.Because, at.Sources, at.Assumptions
+	a.Shown = calmGap(g, v.Peak)
+	return a, nil
+}
+
+// calmGap is the gap at which the electrodes need no care; none where they are too
+// sharp for it at any distance.
+func calmGap(g gap.Gap, v quantity.Voltage) []gap.Beside[quantity.Length] {
+	x := max(evenAtOnset(v), quantity.Length(float64(v)/float64(ComfortableField)))
+	d, err := gapOf(g, x)
+	if err != nil {
+		return nil
+	}
+	return []gap.Beside[quantity.Length]{{Value: d, Source: comfortableSource}}
+}

@@ -34,13 +34,13 @@ func figures(e *evidence.Evidence) []figure.Figure {
 func potentials(c *collector, e *evidence.Evidence) {
 	for _, node := range e.Chain().Nodes() {
 		v, err := e.Potential(node)
-		add(c, "potential", node, e.Basis(), v, err)
+		add(c, "potential", node, evidence.Basis, v, err)
 	}
 }
 
 // bearing lists what every resistor and load bears.
 func bearing(c *collector, e *evidence.Evidence) {
-	basis := e.Basis()
+	const basis = evidence.Basis
 	for _, el := range e.Layout().Elements {
 		if el.Kind != circuit.Resistor && el.Kind != circuit.Sink || el.Role == circuit.Ladder {
 			continue
@@ -57,7 +57,7 @@ func bearing(c *collector, e *evidence.Evidence) {
 }
 
 func output(c *collector, e *evidence.Evidence) {
-	basis := e.Basis()
+	const basis = evidence.Basis
 	v, err := e.Potential("output")
 	add(c, "output.mean", "", basis, max(v, -v), err)
 	ripple, err := e.Swing("output", "ground")
@@ -134,5 +134,5 @@ func divider(c *collector, e *evidence.Evidence) {
 func once(c *collector, e *evidence.Evidence) {
 	of(c, "gun.richardson_limit", "", "hv.gun", e.RichardsonLimit)
 	of(c, "stored.residue", "", "hv.steady", e.Residue)
-	of(c, "multiplier.rise_time", "", e.Basis(), e.RiseTime)
+	of(c, "multiplier.rise_time", "", evidence.Basis, e.RiseTime)
 }

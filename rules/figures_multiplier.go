@@ -6,7 +6,7 @@ import (
 
 // multiplier lists the multiplier's own figures.
 func multiplier(c *collector, e *evidence.Evidence) {
-	basis := e.Basis()
+	const basis = evidence.Basis
 	of(c, "multiplier.no_load", "", "ripple.cascade", e.NoLoad)
 	of(c, "multiplier.mean", "", basis, e.MultiplierMean)
 	most, err := e.Between("multiplier", "ground")

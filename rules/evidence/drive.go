@@ -6,6 +6,7 @@ import (
 	"kilovet/hv/circuit"
 	"kilovet/hv/lack"
 	"kilovet/hv/quantity"
+	"kilovet/ripple/network"
 )
 
 // Peak is the peak of the drive under the condition: with regulation what holds the
@@ -48,10 +49,22 @@ func (e *Evidence) PeakNeeded() (quantity.Voltage, error) {
 	if e.chain.Regulation == nil {
 		return 0, lack.Key("regulation")
 	}
-	return remember(e, "peak needed", func() (quantity.Voltage, error) {
+	t, err := e.trial()
+	return t.peak, err
+}
+
+// trial is a drive with the state it brings about.
+type trial struct {
+	peak  quantity.Voltage
+	state *network.Periodic
+}
+
+// trial is the drive that holds the set voltage.
+func (e *Evidence) trial() (trial, error) {
+	return remember(e, "drive that holds", func() (trial, error) {
 		set, err := e.held()
 		if err != nil {
-			return 0, err
+			return trial{}, err
 		}
 		return e.peakFor(set)
 	})
@@ -71,46 +84,46 @@ func (e *Evidence) held() (quantity.Voltage, error) {
 
 // peakFor finds the peak for a mean at the sensed node by the secant method; the
 // mean is all but proportional to the peak.
-func (e *Evidence) peakFor(set quantity.Voltage) (quantity.Voltage, error) {
+func (e *Evidence) peakFor(set quantity.Voltage) (trial, error) {
 	const good, tries = 1e-10, 12
 	node := e.chain.Divider.Senses.Or("output")
 	a := e.chain.Drive.Peak.V
-	va, err := e.meanAt(a, node)
+	va, near, err := e.meanAt(a, node, e.alike())
 	if err != nil {
-		return 0, err
+		return trial{}, err
 	}
 	if va <= 0 {
-		return 0, lack.Failed("the load pulls %s to nothing at full drive", node)
+		return trial{}, lack.Failed("the load pulls %s to nothing at full drive", node)
 	}
 	b := a * set / va
 	for range tries {
-		vb, err := e.meanAt(b, node)
+		vb, at, err := e.meanAt(b, node, near)
 		if err != nil {
-			return 0, err
+			return trial{}, err
 		}
-		if math.Abs(float64(vb/set-1)) < good || vb == va {
-			return b, nil
+		if quantity.AtMost(math.Abs(float64(vb/set-1)), good) || vb == va {
+			return trial{b, at}, nil
 		}
-		a, b, va = b, b+(set-vb)*(b-a)/(vb-va), vb
+		a, b, va, near = b, b+(set-vb)*(b-a)/(vb-va), vb, at
 	}
-	return 0, lack.Failed("no drive was found that holds %s at %s", quantity.Text(set), node)
+	return trial{}, lack.Failed("no drive was found that holds %s at %s", quantity.Text(set), node)
 }
 
-// meanAt is the magnitude of a node's mean for a trial peak.
-func (e *Evidence) meanAt(peak quantity.Voltage, node string) (quantity.Voltage, error) {
+// meanAt is the magnitude of a node's mean for a trial peak, and the state it was read from.
+func (e *Evidence) meanAt(peak quantity.Voltage, node string, from *network.Periodic) (quantity.Voltage, *network.Periodic, error) {
 	c, err := e.circuitAt(peak)
 	if err != nil {
-		return 0, err
+		return 0, nil, err
 	}
-	w, err := e.solve(c)
+	p, err := e.solve(c, from)
 	if err != nil {
-		return 0, err
+		return 0, nil, err
 	}
-	v, err := w.mean(node)
+	s, err := p.between(node, "ground")
 	if c.Negative {
-		v = -v
+		s.Mean = -s.Mean
 	}
-	return v, err
+	return s.Mean, p.Periodic, err
 }
 
 // Circuit is the circuit under the condition.

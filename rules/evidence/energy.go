@@ -14,13 +14,9 @@ func (e *Evidence) means() (steady.Voltages, error) {
 		if err != nil {
 			return nil, err
 		}
-		s, err := e.solution()
-		if err != nil {
-			return nil, err
-		}
 		v := make(steady.Voltages, c.Nodes())
 		for n := 1; n < c.Nodes(); n++ {
-			if v[n], err = s.mean(c.Labels(circuit.Node(n))[0]); err != nil {
+			if v[n], err = e.Potential(c.Labels(circuit.Node(n))[0]); err != nil {
 				return nil, err
 			}
 		}

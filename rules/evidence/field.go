@@ -113,11 +113,11 @@ func (e *Evidence) FieldUnder(f *chain.Field) (*field.Field, error) {
 
 // highestSigned is the potential of a node where it is farthest from ground.
 func (e *Evidence) highestSigned(node string) (quantity.Voltage, error) {
-	s, err := e.span(node, "ground")
-	if -s.least > s.most {
-		return s.least, err
+	s, err := e.swing(node, "ground")
+	if -s.Least > s.Greatest {
+		return s.Least, err
 	}
-	return s.most, err
+	return s.Greatest, err
 }
 
 // FieldPeak is the greatest field on an electrode over all states and corners, and

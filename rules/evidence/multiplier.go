@@ -11,15 +11,6 @@ import (
 	"kilovet/ripple/cascade"
 )
 
-// Basis names what the steady state rests on.
-func (e *Evidence) Basis() string {
-	s, err := e.solution()
-	if err != nil {
-		return ""
-	}
-	return s.basis()
-}
-
 // NoLoad is 2 N (peak − forward drop) at the drive of the condition.
 func (e *Evidence) NoLoad() (quantity.Voltage, error) {
 	c, err := e.Cascade()
@@ -38,8 +29,8 @@ func (e *Evidence) MultiplierMean() (quantity.Voltage, error) {
 // MultiplierMinimum is the smallest magnitude at the top of the smoothing column;
 // zero where it passes through zero.
 func (e *Evidence) MultiplierMinimum() (quantity.Voltage, error) {
-	s, err := e.span("multiplier", "ground")
-	return max(s.least, -s.most, 0), err
+	s, err := e.swing("multiplier", "ground")
+	return max(s.Least, -s.Greatest, 0), err
 }
 
 // Drop is what the mean lies below no load, and why.
@@ -88,12 +79,16 @@ func (e *Evidence) split(d *Drop, mean quantity.Voltage) error {
 
 // topOf is the magnitude of the mean at the top of an edited circuit.
 func (e *Evidence) topOf(c *circuit.Circuit) (quantity.Voltage, error) {
-	s, err := e.solve(c)
+	near, err := e.Network()
 	if err != nil {
 		return 0, err
 	}
-	v, err := s.mean("multiplier")
-	return magnitude(v), err
+	p, err := e.solve(c, near)
+	if err != nil {
+		return 0, err
+	}
+	s, err := p.between("multiplier", "ground")
+	return magnitude(s.Mean), err
 }
 
 // stiffDrive takes away what stands in series with the drive and in the diodes.
@@ -224,12 +219,16 @@ func (e *Evidence) lastDiodes() []string {
 
 // DiodeCurrentPeak is the largest peak current of any diode of the multiplier.
 func (e *Evidence) DiodeCurrentPeak() (quantity.Current, error) {
-	return 0, lack.Failed("peak currents need the network in time")
+	return largestOf(e, isDiode, (*Evidence).DiodePeak)
 }
 
 // InputPower is the mean power of the drive sources.
 func (e *Evidence) InputPower() (quantity.Power, error) {
-	return 0, lack.Failed("the input power needs the network in time")
+	s, err := e.solution()
+	if err != nil {
+		return 0, err
+	}
+	return s.InputPower(), nil
 }
 
 // RiseTime is from discharged at full drive to 95 % of the final mean.

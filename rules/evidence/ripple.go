@@ -47,7 +47,7 @@ func (e *Evidence) DriveLines() ([]Line, error) {
 
 // driven holds the multiplier's top and the top of its coupling columns at their
 // harmonic of order k.
-func (e *Evidence) driven(s solution, k int) (phasor.Excitation, error) {
+func (e *Evidence) driven(s periodic, k int) (phasor.Excitation, error) {
 	c, err := e.Circuit()
 	if err != nil {
 		return phasor.Excitation{}, err

@@ -1,70 +1,78 @@
 package evidence
 
 import (
-	"kilovet/hv/circuit"
+	"math"
+
 	"kilovet/hv/lack"
 	"kilovet/hv/quantity"
+	"kilovet/ripple/network"
 )
 
-// span is how a voltage moves over a period of the drive, with its signs.
-type span struct {
-	least, most, mean, rms quantity.Voltage
-}
+// Basis is what the steady state rests on.
+const Basis = "ripple.network"
 
-// peak is the largest magnitude.
-func (s span) peak() quantity.Voltage { return max(s.most, -s.least) }
-
-// swing is peak to peak.
-func (s span) swing() quantity.Voltage { return s.most - s.least }
-
-// carried is what a diode carries over a period.
-type carried struct {
-	reverse    quantity.Voltage // largest
-	peak, mean quantity.Current
-}
-
-// solution is the steady state of a circuit over a period of its drive.
-type solution interface {
-	mean(node string) (quantity.Voltage, error)
-	between(node, reference string) (span, error)
-	diode(name string) (carried, error)
-	power(element *circuit.Element) (quantity.Power, error)
-	// harmonic is the complex amplitude at k times the drive frequency.
-	harmonic(node, reference string, k int) (complex128, error)
-	basis() string
-}
-
-// solution is the steady state under the condition.
-func (e *Evidence) solution() (solution, error) {
-	return remember(e, "solution", func() (solution, error) {
+// solution is the steady state under the condition: the one that the search for the
+// drive ended with, or one found from that of the nominal chain, which is near.
+func (e *Evidence) solution() (periodic, error) {
+	return remember(e, "solution", func() (periodic, error) {
 		c, err := e.Circuit()
 		if err != nil {
-			return nil, err
+			return periodic{}, err
 		}
-		return e.solve(c)
+		if e.holds() {
+			if t, err := e.trial(); err == nil && t.peak <= e.chain.Drive.Peak.V {
+				return periodic{t.state}, nil
+			}
+		}
+		return e.solve(c, e.alike())
 	})
+}
+
+// holds reports whether regulation is at work and at its full drive.
+func (e *Evidence) holds() bool {
+	share := e.condition.Drive
+	return e.chain.Regulation != nil && e.condition.State != Lost && (share == 0 || share == 1)
+}
+
+// alike is the state of the nominal chain, whole and at full drive, to start from; nil
+// where this is the one, or where it has none.
+func (e *Evidence) alike() *network.Periodic {
+	if e.condition.Corner == Nominal && e.condition.Fault.Name == "" {
+		return nil
+	}
+	s, err := e.Under(Condition{State: e.condition.State}).solution()
+	if err != nil {
+		return nil
+	}
+	return s.Periodic
+}
+
+// Network is the steady state in time, for wave-forms and what else is not asked often.
+func (e *Evidence) Network() (*network.Periodic, error) {
+	s, err := e.solution()
+	return s.Periodic, err
 }
 
 // Potential is the mean potential of a node to ground, signed.
 func (e *Evidence) Potential(node string) (quantity.Voltage, error) {
-	s, err := e.solution()
-	if err != nil {
-		return 0, err
-	}
-	return s.mean(node)
+	s, err := e.swing(node, "ground")
+	return s.Mean, err
 }
 
 // Between is the largest magnitude of the voltage between two nodes over a period of
 // the drive.
 func (e *Evidence) Between(a, b string) (quantity.Voltage, error) {
-	s, err := e.span(a, b)
-	return s.peak(), err
+	s, err := e.swing(a, b)
+	return s.Peak(), err
 }
 
 // RMS is the r.m.s. voltage between two nodes: of a DC voltage its magnitude.
 func (e *Evidence) RMS(a, b string) (quantity.Voltage, error) {
-	s, err := e.span(a, b)
-	return s.rms, err
+	s, err := e.solution()
+	if err != nil {
+		return 0, err
+	}
+	return s.rms(a, b)
 }
 
 // Swing is the peak-to-peak voltage between two nodes.
@@ -72,14 +80,14 @@ func (e *Evidence) Swing(a, b string) (quantity.Voltage, error) {
 	if err := e.sound(); err != nil {
 		return 0, err
 	}
-	s, err := e.span(a, b)
-	return s.swing(), err
+	s, err := e.swing(a, b)
+	return s.PeakToPeak(), err
 }
 
-func (e *Evidence) span(a, b string) (span, error) {
+func (e *Evidence) swing(a, b string) (network.Swing, error) {
 	s, err := e.solution()
 	if err != nil {
-		return span{}, err
+		return network.Swing{}, err
 	}
 	return s.between(a, b)
 }
@@ -92,20 +100,15 @@ func (e *Evidence) ElementPeak(name string) (quantity.Voltage, error) {
 
 // ElementCurrent is the magnitude of the mean current through a resistor or load.
 func (e *Evidence) ElementCurrent(name string) (quantity.Current, error) {
-	c, err := e.Circuit()
+	s, err := e.solution()
 	if err != nil {
 		return 0, err
 	}
-	el := c.Element(name)
-	if el == nil {
+	if s.Circuit.Element(name) == nil {
 		return 0, lack.Failed("there is no %s", name)
 	}
-	if el.Kind == circuit.Sink {
-		return el.Current, nil
-	}
-	from, to := el.Ends()
-	s, err := e.span(from, to)
-	return quantity.Current(float64(magnitude(s.mean)) / float64(el.Resistance)), err
+	f, err := s.Through(name)
+	return quantity.Current(math.Abs(float64(f.Mean))), err
 }
 
 // ElementPower is the mean power a resistor turns into heat.
@@ -114,29 +117,34 @@ func (e *Evidence) ElementPower(name string) (quantity.Power, error) {
 	if err != nil {
 		return 0, err
 	}
-	c, err := e.Circuit()
-	if err != nil {
-		return 0, err
-	}
-	return s.power(c.Element(name))
+	return s.Power(name), nil
 }
 
 // ReversePeak is the largest reverse voltage of a diode.
 func (e *Evidence) ReversePeak(name string) (quantity.Voltage, error) {
-	d, err := e.carried(name)
-	return d.reverse, err
+	d, err := e.diode(name)
+	return d.ReversePeak, err
 }
 
 // DiodeMean is the mean forward current of a diode.
 func (e *Evidence) DiodeMean(name string) (quantity.Current, error) {
-	d, err := e.carried(name)
-	return d.mean, err
+	d, err := e.diode(name)
+	return d.Mean, err
 }
 
-func (e *Evidence) carried(name string) (carried, error) {
+// DiodePeak is the largest forward current of a diode, without that of its junction.
+func (e *Evidence) DiodePeak(name string) (quantity.Current, error) {
+	d, err := e.diode(name)
+	return d.Peak, err
+}
+
+func (e *Evidence) diode(name string) (network.DiodeFigures, error) {
 	s, err := e.solution()
 	if err != nil {
-		return carried{}, err
+		return network.DiodeFigures{}, err
 	}
-	return s.diode(name)
+	if s.Circuit.Element(name) == nil {
+		return network.DiodeFigures{}, lack.Failed("there is no diode %s", name)
+	}
+	return s.Diode(name), nil
 }

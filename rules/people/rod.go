@@ -117,11 +117,11 @@ func judgeResidue(e *evidence.Evidence) rule.Judgement {
 	}
 	f.Because = fmt.Sprintf("the diodes of the intact ladder hold back up to %s", quantity.Text(left))
 	f.Remedy = "put the rod to every column node"
-	f = f.Most(rule.Of(left), rule.Of(limits.TouchVoltage), 0)
-	if f.Verdict == rule.Fails && access.EarthingRod != nil {
-		f.Verdict = rule.Marginal
+	if quantity.AtMost(left, limits.TouchVoltage) || access.EarthingRod == nil {
+		return *only(f.Most(rule.Of(left), rule.Of(limits.TouchVoltage), 0).WithoutRemedyIfMet())
 	}
-	return *only(f.WithoutRemedyIfMet())
+	f.Relation = rule.Presence
+	return *only(f.There(true).Assume("a rod is put to every node before anything is touched"))
 }
 
 var rodVoltage = rule.Rule{

@@ -1,0 +1,151 @@
+package compare_test
+
+import (
+	"strings"
+	"testing"
+
+	"github.com/google/go-cmp/cmp"
+	"pgregory.net/rapid"
+
+	"kilovet/hv/document"
+	"kilovet/rules/compare"
+	"kilovet/rules/figure"
+	"kilovet/rules/rule"
+)
+
+func described(text string) compare.Side { return compare.Side{Inputs: document.List([]byte(text))} }
+
+func TestInputs(t *testing.T) {
+	for _, c := range []struct{ name, old, new, want string }{
+		{"the same", "title = \"a\"\n", "title   = \"a\" # said\n", ""},
+		{"a text", "title = \"a\"\n", "title = \"b\"\n", `title "a" "b" false`},
+		{"another unit", "drive.peak = \"1.75 kV\"\n", "drive.peak = \"1750 V\"\n", `drive.peak "1.75 kV" "1750 V" true`},
+		{"another value", "drive.peak = \"1.75 kV\"\n", "drive.peak = \"1.76 kV\"\n", `drive.peak "1.75 kV" "1.76 kV" false`},
+		{"a number", "gun.exponent = 2\n", "gun.exponent = 2.0\n", `gun.exponent 2 2.0 true`},
+		{"a word is no number", "drive.waveform = \"sine\"\n", "drive.waveform = 'sine'\n", `drive.waveform "sine" 'sine' false`},
+		{"added", "", "multiplier.stages = 6\n", `multiplier.stages  6 false`},
+		{"taken out", "multiplier.stages = 6\n", "", `multiplier.stages 6  false`},
+		{"moved", "[[spacing]]\nname = \"a\"\ncreepage = \"1 m\"\n[[spacing]]\nname = \"b\"\n", "[[spacing]]\nname = \"b\"\n[[spacing]]\nname = \"a\"\ncreepage = \"1 m\"\n", ""},
+		{"one of several", "[[spacing]]\nname = \"a\"\ncreepage = \"1 m\"\n", "[[spacing]]\nname = \"a\"\ncreepage = \"2 m\"\n", `spacing "a".creepage "1 m" "2 m" false`},
+	} {
+		var lines []string
+		for _, in := range compare.Of(described(c.old), described(c.new)).Inputs {
+			lines = append(lines, strings.Join([]string{in.At, in.Old, in.New, map[bool]string{true: "true", false: "false"}[in.Rewritten]}, " "))
+		}
+		if got := strings.Join(lines, "\n"); got != c.want {
+			t.Errorf("%s: got %q, want %q", c.name, got, c.want)
+		}
+	}
+}
+
+func numbers(values ...float64) compare.Side {
+	var s compare.Side
+	for i, v := range values {
+		s.Figures = append(s.Figures, figure.Figure{ID: "potential", Subject: string(rune('a' + i)), State: "cold", Unit: "V", Value: v})
+	}
+	return s
+}
+
+func TestFiguresMoveBeyondAMillionth(t *testing.T) {
+	for _, c := range []struct {
+		old, new float64
+		moved    bool
+		change   float64
+	}{
+		{1000, 1000.0009, false, 0}, {1000, 1000.0011, true, 1.1e-6}, {-20000, -21000, true, -0.05}, {2e-12, 3e-12, true, 0.5}, {0, 0, false, 0},
+	} {
+		moved := compare.Of(numbers(c.old), numbers(c.new)).Figures
+		if len(moved) > 0 != c.moved {
+			t.Errorf("%v to %v: %v", c.old, c.new, moved)
+		} else if c.moved && (*moved[0].Old != c.old || *moved[0].New != c.new || *moved[0].Change < c.change*0.999999-1e-12 || *moved[0].Change > c.change*1.000001+1e-12) {
+			t.Errorf("%v to %v: change %v, want %v", c.old, c.new, *moved[0].Change, c.change)
+		}
+	}
+}
+
+func TestFiguresWithoutAChange(t *testing.T) {
+	from := compare.Of(numbers(0), numbers(3)).Figures
+	gone := compare.Of(numbers(1, 2), numbers(1)).Figures
+	came := compare.Of(numbers(1), numbers(1, 2)).Figures
+	if len(from) != 1 || from[0].Change != nil || len(gone) != 1 || gone[0].New != nil || gone[0].Change != nil || len(came) != 1 || came[0].Old != nil {
+		t.Errorf("%v, %v, %v", from, gone, came)
+	}
+}
+
+func judged(verdicts ...rule.Verdict) compare.Side {
+	var s compare.Side
+	for i, v := range verdicts {
+		if v != "" {
+			s.Findings = append(s.Findings, rule.Finding{Rule: "spacing.creepage", Subject: string(rune('a' + i)), Verdict: v})
+		}
+	}
+	s.Verdict = rule.Worst(s.Findings)
+	return s
+}
+
+func TestWorse(t *testing.T) {
+	for _, c := range []struct {
+		old, new rule.Verdict
+		changed  int
+		worse    bool
+	}{
+		{rule.Meets, rule.Meets, 0, false}, {rule.Fails, rule.Fails, 0, false},
+		{rule.Meets, rule.Marginal, 1, true}, {rule.Marginal, rule.Unassessed, 1, true}, {rule.Unassessed, rule.Fails, 1, true},
+		{rule.Fails, rule.Unassessed, 1, false}, {rule.Fails, rule.Meets, 1, false},
+		{"", rule.Meets, 1, false}, {"", rule.Marginal, 1, false}, {"", rule.Unassessed, 1, true}, {"", rule.Fails, 1, true},
+		{rule.Fails, "", 1, false},
+	} {
+		// A finding that fails on both sides keeps the verdict of the whole out of it.
+		d := compare.Of(judged(rule.Fails, c.old), judged(rule.Fails, c.new))
+		if len(d.Findings) != c.changed || d.Worse != c.worse {
+			t.Errorf("%q to %q: %d changed, worse %t", c.old, c.new, len(d.Findings), d.Worse)
+		}
+	}
+}
+
+// Nothing judged any more is unassessed, and that is worse than what was met.
+func TestNothingJudgedIsWorse(t *testing.T) {
+	if d := compare.Of(judged(rule.Meets), judged()); !d.Worse || d.New != rule.Unassessed {
+		t.Errorf("%+v", d)
+	}
+}
+
+func sides(t *rapid.T, label string) compare.Side {
+	verdicts := append([]rule.Verdict{""}, rule.Verdicts...)
+	s := judged(rapid.SliceOfN(rapid.SampledFrom(verdicts), 0, 4).Draw(t, label)...)
+	s.Figures = numbers(rapid.SliceOfN(rapid.Float64Range(-9, 9), 0, 4).Draw(t, label)...).Figures
+	s.Inputs = described(rapid.SampledFrom([]string{"", "title = 1", "title = 2", "format = 1\ntitle = 2"}).Draw(t, label)).Inputs
+	return s
+}
+
+func TestASideDoesNotDifferFromItself(t *testing.T) {
+	rapid.Check(t, func(t *rapid.T) {
+		s := sides(t, "side")
+		if d := compare.Of(s, s); !d.Nothing() || d.Worse {
+			t.Errorf("%+v", d)
+		}
+	})
+}
+
+// Seen from the other side the same things have changed, and what got worse one way
+// is not worse the other way.
+func TestTheOtherWayRound(t *testing.T) {
+	rapid.Check(t, func(t *rapid.T) {
+		old, new := sides(t, "old"), sides(t, "new")
+		there, back := compare.Of(old, new), compare.Of(new, old)
+		if diff := cmp.Diff(sizes(there), sizes(back)); diff != "" {
+			t.Error(diff)
+		}
+		for _, f := range there.Findings {
+			for _, g := range back.Findings {
+				if f.Subject == g.Subject && f.Worse && g.Worse {
+					t.Errorf("%s is worse both ways", f.Subject)
+				}
+			}
+		}
+	})
+}
+
+func sizes(d compare.Difference) [3]int {
+	return [3]int{len(d.Inputs), len(d.Figures), len(d.Findings)}
+}

@@ -1,0 +1,88 @@
+package evidence
+
+import (
+	"math"
+
+	"kilovet/hv/circuit"
+	"kilovet/hv/lack"
+	"kilovet/hv/quantity"
+	"kilovet/ripple/network"
+)
+
+// periodic is the steady state of a circuit in time, by the names of its nodes.
+type periodic struct{ *network.Periodic }
+
+// solve finds the steady state of a circuit, from that of a similar one where given.
+func (e *Evidence) solve(c *circuit.Circuit, from *network.Periodic) (periodic, error) {
+	p, err := network.Steady(trusted(c), network.Options{Frequency: e.chain.Drive.Frequency.V, From: from})
+	return periodic{p}, err
+}
+
+// trusted is the circuit with the doubts outside the multiplier set aside: means and
+// ratings do not rest on them, and whoever asks for ripple or charge meets them again.
+func trusted(c *circuit.Circuit) *circuit.Circuit {
+	if c.Doubt() == nil {
+		return c
+	}
+	return c.Each(func(el *circuit.Element) bool {
+		if el.Role != circuit.Ladder && el.Kind == circuit.Capacitor {
+			el.Doubt = nil
+		}
+		return true
+	})
+}
+
+func (p periodic) node(name string) (circuit.Node, error) {
+	n, ok := p.Circuit.Node(name)
+	if !ok {
+		return 0, lack.Failed("there is no node %s", name)
+	}
+	return n, nil
+}
+
+// between is how the voltage between two nodes moves.
+func (p periodic) between(node, reference string) (network.Swing, error) {
+	a, err := p.node(node)
+	if err != nil {
+		return network.Swing{}, err
+	}
+	b, err := p.node(reference)
+	if err != nil {
+		return network.Swing{}, err
+	}
+	return p.Between(a, b)
+}
+
+// rms of the voltage between two nodes, by the trapezoid rule over the steps.
+func (p periodic) rms(node, reference string) (quantity.Voltage, error) {
+	a, err := p.node(node)
+	if err != nil {
+		return 0, err
+	}
+	b, err := p.node(reference)
+	if err != nil {
+		return 0, err
+	}
+	points, err := p.Wave(a, b)
+	if err != nil || len(points) < 2 {
+		return 0, err
+	}
+	sum, length := 0.0, float64(points[len(points)-1].Time-points[0].Time)
+	for i, x := range points[1:] {
+		v, w, dt := float64(points[i].Voltage), float64(x.Voltage), float64(x.Time-points[i].Time)
+		sum += dt * (v*v + v*w + w*w) / 3
+	}
+	return quantity.Voltage(math.Sqrt(sum / length)), nil
+}
+
+func (p periodic) harmonic(node, reference string, k int) (complex128, error) {
+	a, err := p.node(node)
+	if err != nil {
+		return 0, err
+	}
+	b, err := p.node(reference)
+	if err != nil {
+		return 0, err
+	}
+	return p.Harmonic(a, b, k)
+}

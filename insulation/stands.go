@@ -9,6 +9,7 @@ import (
 	"kilovet/insulation/gas"
 	"kilovet/insulation/shape"
 	"kilovet/insulation/table"
+	"kilovet/insulation/vacuum"
 )
 
 // FieldPeak is the highest field of the shape at the peak voltage, exact for the ideal
@@ -64,6 +65,9 @@ func lineOf(g gap.Gap) (shape.Line, error) {
 // electrodes discharge from about 2 kV on.
 func Onset(g gap.Gap) (gap.Answer[quantity.Voltage], error) {
 	var none gap.Answer[quantity.Voltage]
+	if g.Medium == gap.Vacuum {
+		return vacuum.Onset(g)
+	}
 	if err := inGas(g); err != nil {
 		return none, err
 	}
@@ -114,6 +118,9 @@ func Breakdown(g gap.Gap, sharp gap.Polarity) (gap.Answer[quantity.Voltage], err
 
 func breakdown(g gap.Gap, sharp gap.Polarity, starts gap.Result[quantity.Voltage]) (gap.Answer[quantity.Voltage], error) {
 	var none gap.Answer[quantity.Voltage]
+	if g.Medium == gap.Vacuum {
+		return vacuum.Breakdown(g)
+	}
 	if err := inGas(g); err != nil {
 		return none, err
 	}

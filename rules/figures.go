@@ -133,6 +133,10 @@ func divider(c *collector, e *evidence.Evidence) {
 // once lists what does not depend on the state.
 func once(c *collector, e *evidence.Evidence) {
 	of(c, "gun.richardson_limit", "", "hv.gun", e.RichardsonLimit)
+	if band, err := e.DischargeBand(); err == nil {
+		add(c, "vacuum.band_from", "", "insulation.vacuum", band.From, nil)
+		add(c, "vacuum.band_to", "", "insulation.vacuum", band.To, nil)
+	}
 	of(c, "stored.residue", "", "hv.steady", e.Residue)
 	of(c, "multiplier.rise_time", "", evidence.Basis, e.RiseTime)
 }

@@ -9,12 +9,13 @@ import (
 	"kilovet/rules/rule"
 	"kilovet/rules/spacing"
 	"kilovet/rules/supply"
+	"kilovet/rules/vessel"
 )
 
 // All lists every rule, in the order in which findings are given.
 func All() []rule.Rule {
 	var all []rule.Rule
-	for _, family := range [][]rule.Rule{people.Rules(), spacing.Rules(), parts.Rules(), supply.Rules(), optics.Rules()} {
+	for _, family := range [][]rule.Rule{people.Rules(), spacing.Rules(), vessel.Rules(), parts.Rules(), supply.Rules(), optics.Rules()} {
 		all = append(all, family...)
 	}
 	return all

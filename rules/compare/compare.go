@@ -18,7 +18,7 @@ type Side struct {
 
 // Difference is how the new side differs from the old.
 type Difference struct {
-	Old, New rule.Verdict // of the whole reviews
+	Was, Is  rule.Verdict // of the whole, old and new
 	Inputs   []Input
 	Figures  []Figure
 	Findings []Finding
@@ -51,9 +51,9 @@ type Finding struct {
 
 // Of compares two sides.
 func Of(old, new Side) Difference {
-	d := Difference{Old: old.Verdict, New: new.Verdict,
+	d := Difference{Was: old.Verdict, Is: new.Verdict,
 		Inputs: inputs(old.Inputs, new.Inputs), Figures: figures(old.Figures, new.Figures), Findings: findings(old.Findings, new.Findings)}
-	d.Worse = rule.Graver(d.New, d.Old)
+	d.Worse = rule.Graver(d.Is, d.Was)
 	for _, f := range d.Findings {
 		d.Worse = d.Worse || f.Worse
 	}
@@ -62,7 +62,7 @@ func Of(old, new Side) Difference {
 
 // Nothing reports whether the sides are the same.
 func (d Difference) Nothing() bool {
-	return len(d.Inputs)+len(d.Figures)+len(d.Findings) == 0 && d.Old == d.New
+	return len(d.Inputs)+len(d.Figures)+len(d.Findings) == 0 && d.Was == d.Is
 }
 
 // pair is what two lists hold under one name.

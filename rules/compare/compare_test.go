@@ -1,6 +1,7 @@
 package compare_test
 
 import (
+	"math"
 	"strings"
 	"testing"
 
@@ -57,7 +58,7 @@ func TestFiguresMoveBeyondAMillionth(t *testing.T) {
 		moved := compare.Of(numbers(c.old), numbers(c.new)).Figures
 		if len(moved) > 0 != c.moved {
 			t.Errorf("%v to %v: %v", c.old, c.new, moved)
-		} else if c.moved && (*moved[0].Old != c.old || *moved[0].New != c.new || *moved[0].Change < c.change*0.999999-1e-12 || *moved[0].Change > c.change*1.000001+1e-12) {
+		} else if c.moved && (*moved[0].Old != c.old || *moved[0].New != c.new || math.Abs(*moved[0].Change-c.change) > 1e-6*math.Abs(c.change)) {
 			t.Errorf("%v to %v: change %v, want %v", c.old, c.new, *moved[0].Change, c.change)
 		}
 	}
@@ -105,7 +106,7 @@ func TestWorse(t *testing.T) {
 
 // Nothing judged any more is unassessed, and that is worse than what was met.
 func TestNothingJudgedIsWorse(t *testing.T) {
-	if d := compare.Of(judged(rule.Meets), judged()); !d.Worse || d.New != rule.Unassessed {
+	if d := compare.Of(judged(rule.Meets), judged()); !d.Worse || d.Is != rule.Unassessed {
 		t.Errorf("%+v", d)
 	}
 }

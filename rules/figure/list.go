@@ -100,6 +100,9 @@ var List = []Declaration{
 	{"spacing.onset_estimate", "V", false, "voltage at which discharge is expected to begin", "spacing"},
 	{"spacing.field_peak", "V/m", false, "largest field on the electrodes", "spacing"},
 
+	{"vacuum.band_from", "Pa", false, "gauge reading from which the highest voltage may break down the longest path", ""},
+	{"vacuum.band_to", "Pa", false, "gauge reading up to which it may", ""},
+
 	{"field.peak", "V/m", false, "largest field on the electrode", "field/electrode"},
 	{"field.peak_r", "m", false, "distance of the largest field from the axis", "field/electrode"},
 	{"field.peak_z", "m", false, "height of the largest field", "field/electrode"},

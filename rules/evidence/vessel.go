@@ -1,0 +1,26 @@
+package evidence
+
+import (
+	"kilovet/hv/quantity"
+	"kilovet/insulation/gap"
+	"kilovet/insulation/vacuum"
+)
+
+// Vessel is the vacuum vessel; without one an empty one, that answers with a lack.
+func (e *Evidence) Vessel() vacuum.Vessel {
+	v := e.chain.Vacuum
+	if v == nil {
+		return vacuum.Vessel{}
+	}
+	return vacuum.Vessel{Gas: gap.Gas(v.Gas.V), LongestPath: v.LongestPath.V}
+}
+
+// DischargeBand are the pressures at which the highest voltage of the cathode may
+// break down the longest path.
+func (e *Evidence) DischargeBand() (vacuum.Band, error) {
+	most, err := Largest(e, Ratings(), []string{"output"}, func(e *Evidence, n string) (quantity.Voltage, error) { return e.Between(n, "ground") })
+	if err != nil {
+		return vacuum.Band{}, err
+	}
+	return e.Vessel().Band(most.Value)
+}

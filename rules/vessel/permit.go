@@ -1,0 +1,67 @@
+// Package vessel judges the vacuum vessel as a path for discharges.
+package vessel
+
+import (
+	"fmt"
+
+	"kilovet/hv/document"
+	"kilovet/hv/lack"
+	"kilovet/hv/quantity"
+	"kilovet/insulation/gap"
+	"kilovet/rules/evidence"
+	"kilovet/rules/rule"
+)
+
+var freeSource = rule.Source{Text: "marginal above 0.001 Torr cm over the longest path: below it electrons cross without multiplying", Mark: rule.Practice}
+
+var permit = rule.Rule{
+	ID: "vacuum.permit", Title: "Pressure that permits high voltage",
+	Demands: "High voltage is permitted only below 0.01 Torr cm over the longest straight path between parts at different potential.",
+	Applies: "Where a gun or a vessel is described.",
+	Margin:  "marginal above 0.001 Torr cm",
+	Concern: rule.Equipment,
+	Sources: []rule.Source{{Text: "no high voltage above 0.01 Torr cm over the longest path", Mark: rule.Practice, Governs: true}, freeSource},
+	Example: rule.Example{
+		Swaps:   []rule.Swap{{Was: `pressure_permit = "4e-5 mbar"`, Becomes: `pressure_permit = "1e-3 mbar"`}},
+		Changes: []rule.Change{{Rule: "vacuum.permit", Subject: "vessel", Verdict: rule.Fails}},
+	},
+	Judge: judgePermit,
+}
+
+func judgePermit(e *evidence.Evidence) rule.Judgement {
+	c := e.Chain()
+	if c.Vacuum == nil && c.Gun == nil {
+		return rule.Over("no vessel and no gun is described")
+	}
+	f := rule.Finding{Rule: "vacuum.permit", Subject: "vessel", Concern: rule.Equipment, Relation: rule.AtMost}
+	if c.Vacuum == nil {
+		return one(f.Lacking(lack.Key("vacuum")))
+	}
+	f.Place = c.Vacuum.PressurePermit.Place
+	if err := document.Need(c.Vacuum.PressurePermit, c.Vacuum.LongestPath); err != nil {
+		return one(f.Lacking(err))
+	}
+	limits, err := e.Vessel().Permit()
+	if err != nil {
+		return one(f.Lacking(err))
+	}
+	f.Sources = append(sources(limits.Crowded.Sources), freeSource)
+	f.Because = fmt.Sprintf("permitted below %s; over %s up to %s is free of discharge, none above %s", quantity.Text(c.Vacuum.PressurePermit.V),
+		quantity.Text(c.Vacuum.LongestPath.V), quantity.Text(limits.Free.Value), quantity.Text(limits.Crowded.Value))
+	f.Remedy = "permit high voltage only below " + quantity.Text(limits.Free.Value) + ", or shorten the longest path"
+	margin := float64(limits.Crowded.Value/limits.Free.Value) - 1
+	return one(f.Most(rule.Of(c.Vacuum.PressurePermit.V), rule.Of(limits.Crowded.Value), margin).WithoutRemedyIfMet())
+}
+
+func one(f rule.Finding) rule.Judgement { return rule.Judgement{Findings: []rule.Finding{f}} }
+
+func sources(from []gap.Source) []rule.Source {
+	all := make([]rule.Source, len(from))
+	for i, s := range from {
+		all[i] = rule.Source{Text: s.Text, Mark: rule.Mark(s.Mark), Governs: s.Governs}
+	}
+	return all
+}
+
+// Rules lists the rules of this family.
+func Rules() []rule.Rule { return []rule.Rule{permit} }

@@ -6,6 +6,7 @@ import (
 	"kilovet/rules/optics"
 	"kilovet/rules/parts"
 	"kilovet/rules/people"
+	"kilovet/rules/radiation"
 	"kilovet/rules/rule"
 	"kilovet/rules/spacing"
 	"kilovet/rules/supply"
@@ -15,7 +16,7 @@ import (
 // All lists every rule, in the order in which findings are given.
 func All() []rule.Rule {
 	var all []rule.Rule
-	for _, family := range [][]rule.Rule{people.Rules(), spacing.Rules(), vessel.Rules(), parts.Rules(), supply.Rules(), optics.Rules()} {
+	for _, family := range [][]rule.Rule{people.Rules(), radiation.Rules(), spacing.Rules(), vessel.Rules(), parts.Rules(), supply.Rules(), optics.Rules()} {
 		all = append(all, family...)
 	}
 	return all

@@ -64,6 +64,13 @@ func TestFiguresMoveBeyondAMillionth(t *testing.T) {
 	}
 }
 
+// A residue of arithmetic beside large figures of its kind has not moved.
+func TestResiduesDoNotMove(t *testing.T) {
+	if moved := compare.Of(numbers(300, 8e-9, 1e-6), numbers(300, -2e-9, 2e-6)).Figures; len(moved) != 1 || moved[0].Subject != "c" {
+		t.Errorf("%v", moved)
+	}
+}
+
 func TestFiguresWithoutAChange(t *testing.T) {
 	from := compare.Of(numbers(0), numbers(3)).Figures
 	gone := compare.Of(numbers(1, 2), numbers(1)).Figures

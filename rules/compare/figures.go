@@ -2,22 +2,32 @@ package compare
 
 import (
 	"math"
+	"slices"
 
 	"kilovet/rules/figure"
 )
 
-// still is the relative change below which a figure counts as not moved: figures
-// agree to 1e-6 across machines.
-const still = 1e-6
+const (
+	// still is the relative change below which a figure counts as not moved: figures
+	// agree to 1e-6 across machines.
+	still = 1e-6
+	// rounding is the share of the largest figure of its id below which a change is
+	// that of arithmetic: what is nought by nature comes out as such a residue.
+	rounding = 1e-9
+)
 
 // figures lists the figures that moved, came or went.
 func figures(old, new []figure.Figure) []Figure {
+	largest := map[string]float64{}
+	for _, f := range slices.Concat(old, new) {
+		largest[f.ID] = max(largest[f.ID], math.Abs(f.Value))
+	}
 	var moved []Figure
 	for _, p := range pairs(old, new, figureName) {
-		if p.old != nil && p.new != nil && !differs(p.old.Value, p.new.Value) {
+		f := p.first()
+		if p.old != nil && p.new != nil && !differs(p.old.Value, p.new.Value, largest[f.ID]) {
 			continue
 		}
-		f := p.first()
 		moved = append(moved, Figure{f.ID, f.Subject, f.State, f.What, f.Unit, valueOf(p.old), valueOf(p.new), change(p.old, p.new)})
 	}
 	return moved
@@ -32,7 +42,9 @@ func valueOf(f *figure.Figure) *float64 {
 	return &f.Value
 }
 
-func differs(a, b float64) bool { return math.Abs(a-b) > still*max(math.Abs(a), math.Abs(b)) }
+func differs(a, b, largest float64) bool {
+	return math.Abs(a-b) > max(still*max(math.Abs(a), math.Abs(b)), rounding*largest)
+}
 
 // change is the relative change; nil where a side lacks the figure or the old one is
 // nought.

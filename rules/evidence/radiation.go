@@ -1,0 +1,54 @@
+package evidence
+
+import (
+	"slices"
+
+	"kilovet/hv/chain"
+	"kilovet/hv/lack"
+	"kilovet/hv/quantity"
+	"kilovet/hv/xray"
+)
+
+// surveyDistance is from the outer surface at which the rate is estimated.
+const surveyDistance quantity.Length = 0.1
+
+// Accelerating is the highest voltage that electrons from the cathode can have, over
+// states and corners.
+func (e *Evidence) Accelerating() (Extreme[quantity.Voltage], error) {
+	return Largest(e, Ratings(), []string{"cathode"}, func(e *Evidence, n string) (quantity.Voltage, error) { return e.Between(n, "ground") })
+}
+
+// Radiation is the air kerma rate 0.1 m outside a shield, at a voltage.
+func (e *Evidence) Radiation(s *chain.Shield, u quantity.Voltage) (xray.Estimate, error) {
+	i := slices.IndexFunc(e.chain.Targets, func(t chain.Target) bool { return t.Name.V == s.Target.V })
+	if i < 0 {
+		return xray.Estimate{}, lack.Key("target")
+	}
+	t := &e.chain.Targets[i]
+	stop, err := e.stop(t, u)
+	if err != nil {
+		return xray.Estimate{}, err
+	}
+	distance, err := s.Distance.Need()
+	if err != nil {
+		return xray.Estimate{}, err
+	}
+	wall := xray.Wall{Distance: distance + surveyDistance}
+	for _, l := range s.Layers {
+		m, err := xray.FindMaterial(l.Material.V)
+		if err != nil {
+			return xray.Estimate{}, err
+		}
+		wall.Layers = append(wall.Layers, xray.Layer{Material: m, Thickness: l.Thickness.V})
+	}
+	return stop.Behind(wall)
+}
+
+func (e *Evidence) stop(t *chain.Target, u quantity.Voltage) (xray.Stop, error) {
+	material, err := xray.FindTarget(t.Material.V)
+	if err != nil {
+		return xray.Stop{}, err
+	}
+	current, err := t.Current.Need()
+	return xray.Stop{Target: material, Voltage: u, Current: current}, err
+}

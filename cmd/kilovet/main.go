@@ -94,7 +94,7 @@ func root(w world) *cobra.Command {
 	command.SetIn(w.in)
 	command.SetOut(w.out)
 	command.SetErr(w.err)
-	command.AddCommand(reviewCommand(w), basisCommand(w), draftCommand(w), schemaCommand(w))
+	command.AddCommand(reviewCommand(w), basisCommand(w), draftCommand(w), schemaCommand(w), compareCommand(w))
 	return command
 }
 

@@ -1,0 +1,159 @@
+package difference
+
+import (
+	"bytes"
+	"fmt"
+	"math"
+	"strings"
+
+	"kilovet/hv/quantity"
+	"kilovet/reports/digest"
+	"kilovet/rules/compare"
+	"kilovet/rules/rule"
+)
+
+// Options say how to write text.
+type Options struct {
+	All   bool // every verdict and every figure by itself, not only the most of a kind
+	Width int  // columns; 0 means 80, below 40 counts as 40
+}
+
+// gutter is the column that words about a change stand in.
+const gutter = 10
+
+// Text writes the difference for a terminal.
+func Text(r *Report, o Options) []byte {
+	w := newWriter(o.Width)
+	w.hang("old", gutter, side(r.Old, r.Was))
+	w.hang("new", gutter, side(r.New, r.Is))
+	w.line("")
+	w.hang("", 0, sentence(r))
+	w.section("Changed inputs", len(r.Inputs))
+	for _, in := range r.Inputs {
+		w.hang("", 0, in.At)
+		w.hang("", 4, given(in.Old)+" → "+given(in.New)+rewritten(in))
+	}
+	w.section("Changed verdicts", len(r.Findings))
+	for _, e := range entries(r.Findings, o.All) {
+		e.write(w)
+	}
+	w.section("Moved figures", len(r.Figures))
+	for _, g := range groups(r.Figures) {
+		g.write(w, o.All)
+	}
+	return bytes.Clone(w.out.Bytes())
+}
+
+func side(s Side, v rule.Verdict) string {
+	text := s.Name + ": " + strings.ToUpper(string(v))
+	if s.Title != "" {
+		text += " (" + s.Title + ")"
+	}
+	return text
+}
+
+// sentence says in one sentence how the new side stands to the old.
+func sentence(r *Report) string {
+	worse := 0
+	for _, f := range r.Findings {
+		if f.Worse {
+			worse++
+		}
+	}
+	switch {
+	case worse == 1:
+		return "1 finding is worse."
+	case worse > 0:
+		return fmt.Sprintf("%d findings are worse.", worse)
+	case r.Worse:
+		return "The whole is worse."
+	case r.Nothing():
+		return "Nothing differs."
+	}
+	return "No verdict is worse."
+}
+
+func rewritten(in compare.Input) string {
+	if in.Rewritten {
+		return " (the same value)"
+	}
+	return ""
+}
+
+// group is the figures of one id that moved.
+type group struct {
+	id, what string
+	figures  []compare.Figure
+}
+
+func groups(figures []compare.Figure) []*group {
+	var all []*group
+	byID := map[string]*group{}
+	for _, f := range figures {
+		g := byID[f.ID]
+		if g == nil {
+			g = &group{id: f.ID, what: f.What}
+			byID[f.ID] = g
+			all = append(all, g)
+		}
+		g.figures = append(g.figures, f)
+	}
+	return all
+}
+
+// write shows the figures of a group, all or the one that moved most.
+func (g *group) write(w *writer, all bool) {
+	w.hang("", 0, g.id+": "+g.what)
+	if all || len(g.figures) == 1 {
+		for _, f := range g.figures {
+			w.hang("", 4, moved(f))
+		}
+		return
+	}
+	w.hang("", 4, fmt.Sprintf("%d moved, most: %s", len(g.figures), moved(g.most())))
+}
+
+// most is the figure with the largest relative change; one that came or went counts
+// as the largest.
+func (g *group) most() compare.Figure {
+	best := g.figures[0]
+	for _, f := range g.figures[1:] {
+		if size(f) > size(best) {
+			best = f
+		}
+	}
+	return best
+}
+
+func size(f compare.Figure) float64 {
+	if f.Change == nil {
+		return math.Inf(1)
+	}
+	return math.Abs(*f.Change)
+}
+
+func moved(f compare.Figure) string {
+	var where []string
+	for _, s := range []string{f.Subject, f.State} {
+		if s != "" {
+			where = append(where, s)
+		}
+	}
+	text := amountOf(f.Old, f.Unit) + " → " + amountOf(f.New, f.Unit)
+	if where != nil {
+		text = strings.Join(where, ", ") + ": " + text
+	}
+	if f.Change != nil {
+		text += fmt.Sprintf(" (%s)", signed(*f.Change))
+	}
+	return text
+}
+
+// signed writes a relative change with its sign.
+func signed(share float64) string {
+	text := digest.Clean(quantity.Text(quantity.Fraction(share)))
+	if share > 0 {
+		return "+" + text
+	}
+	return text
+}

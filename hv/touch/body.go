@@ -52,8 +52,8 @@ type Shock struct {
 }
 
 // Through discharges a capacitance at a voltage through a body: M. Mitolo, Electrical
-// Safety of Low-Voltage Systems p. 221. Skin and arc are left
-// out, as in the models. A resistance of zero is a lack.
+// Safety of Low-Voltage Systems p. 221 (read). Skin and arc are left out, as in the
+// models. A resistance of zero is a lack.
 func Through(c quantity.Capacitance, u quantity.Voltage, body quantity.Resistance) (Shock, error) {
 	if err := charged(c, u); err != nil {
 		return Shock{}, err

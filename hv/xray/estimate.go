@@ -6,9 +6,11 @@ import (
 	"kilovet/hv/quantity"
 )
 
-// Band is how far beam and estimate may lie apart: behind filters the estimate came
-// out 1.0 to 2.6 times published figures (tube output at 50 to 90 kV behind 1 to 3 mm
-// aluminium, radiographic output, ISO quality N-30).
+// Band is how far the upper figure stands above the best estimate at least: for build-up
+// in heavy walls, for the K lines of heavy targets and for straight lines between rows.
+// The continuum's level needs none: behind filters the best estimate came out 1.0 to 2.6
+// times published figures (tube output at 50 to 90 kV behind 1 to 3 mm aluminium,
+// radiographic output, ISO quality N-30), never below.
 const Band = 2.0
 
 // Estimate is the air kerma rate at a point behind a wall.

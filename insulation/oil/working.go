@@ -1,0 +1,63 @@
+package oil
+
+import (
+	"kilovet/hv/lack"
+	"kilovet/hv/quantity"
+	"kilovet/insulation/gap"
+)
+
+// Working stress of small oil gaps under DC; the lower judges.
+const (
+	WorkingField quantity.Field = 2e6
+	BoldField    quantity.Field = 5e6
+)
+
+var (
+	workingSource = gap.Source{Text: "2 kV/mm in small oil gaps under DC", Mark: gap.Practice}
+	boldSource    = gap.Source{Text: "5 kV/mm in small oil gaps under DC, clean and filtered", Mark: gap.Practice}
+)
+
+// Gaps that practice calls small.
+const (
+	closestSmall quantity.Length = 0.1e-3
+	widestSmall  quantity.Length = 50e-3
+)
+
+// ClearanceNeeded is the gap in oil at which the peak voltage has a peak field of 2
+// kV/mm, from 0.1 to 50 mm; beside it that of 5 kV/mm. Both are practice. Without a shape,
+// and where the electrodes are too sharp at any gap, there is a lack.
+func ClearanceNeeded(g gap.Gap, v gap.Voltages) (gap.Answer[quantity.Length], error) {
+	d, err := gapAt(g, v.Peak, WorkingField)
+	if err != nil {
+		return gap.Answer[quantity.Length]{}, err
+	}
+	a := gap.Answer[quantity.Length]{
+		Value: d, Because: quantity.Text(v.Peak) + " peak at 2 kV/mm in oil",
+		Sources:     []gap.Source{workingSource.Governing()},
+		Assumptions: []string{"the working stress of oil is common practice, no source was read"},
+	}
+	if bold, err := gapAt(g, v.Peak, BoldField); err == nil {
+		a.Shown = []gap.Beside[quantity.Length]{{Value: bold, Source: boldSource}}
+	}
+	return a, nil
+}
+
+// gapAt is the gap whose peak field at a voltage is a limit, the closest small one where
+// that stands more.
+func gapAt(g gap.Gap, v quantity.Voltage, limit quantity.Field) (quantity.Length, error) {
+	stands := func(g gap.Gap) (quantity.Voltage, error) {
+		l, err := lineOf(g)
+		if err != nil {
+			return 0, err
+		}
+		return quantity.Voltage(float64(limit) / float64(l.PerVolt(0))), nil
+	}
+	if g.Shape == nil {
+		return 0, lack.Key("spacing.shape")
+	}
+	closest := max(closestSmall, 1.0001e-4*g.Shape.Sharpest())
+	if u, err := stands(withGap(g, closest)); err == nil && u >= v {
+		return closest, nil
+	}
+	return gapWhere(g, closestSmall, widestSmall, v, stands)
+}

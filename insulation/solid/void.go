@@ -73,7 +73,7 @@ func (c Void) Inception(stands quantity.Field) (quantity.Voltage, error) {
 }
 
 // TextbookVoidField is what the books let the air of a void stand, peak. Small voids
-// stand more, so it is a lower bound down to a centimetre.
+// stand more: up to a centimetre it is a lower bound.
 const TextbookVoidField quantity.Field = 3e6
 
 // VoidField is what the gas of a void stands between plates of its size, per metre:

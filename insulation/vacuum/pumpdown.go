@@ -98,8 +98,8 @@ func (s Vessel) PathFor(reading quantity.Pressure, pd quantity.PressureLength) (
 	return quantity.Length(float64(s.at(pd)) / float64(reading)), nil
 }
 
-// WorstPressure is the reading at which the longest path stands least, and Least what it
-// then stands: the measured Paschen minimum of the gas.
+// WorstPressure is the reading at which the longest path stands least: where the measured
+// Paschen minimum of the gas lies.
 func (s Vessel) WorstPressure() (gap.Answer[quantity.Pressure], error) {
 	m, err := s.minimum()
 	if err != nil {

@@ -1,0 +1,41 @@
+// Package network solves the circuit of a chain in time: the periodic state under
+// its drive, the start from nothing, arcs, and the decay after switching off.
+//
+// # Elements
+//
+// Resistors, capacitors, inductors, constant currents, ideal sources (direct, sine,
+// square) and diodes i = leak·v + max(0, v − drop)/on with a junction capacitance.
+// Between two switchings the network is linear with constant coefficients; the
+// diode law is continuous, so nothing jumps when a diode switches. Spark gaps are
+// open. Sources of another frequency than the drive are held at zero. Sources join
+// nodes into groups with one free potential each, which makes every matrix
+// symmetric; capacitor loops through sources, nodes without capacitance and
+// floating parts need nothing special.
+//
+// # Step
+//
+// Radau IIA of order five, as its rational function of the matrix in partial
+// fractions: one real and one complex solution a step with sparse factors L D Lᵀ in
+// the order of least degree, so that a step costs time in proportion to the stages
+// (Hairer and Wanner, Solving Ordinary Differential Equations II, 1996). The sine
+// is part of the linear system, with its frequency corrected such that amplitude and
+// phase are exact. What is carried from step to step is charge and inductor current,
+// which go on through every jump: charge is balanced to rounding. The collocation
+// polynomial gives the instants at which diodes switch, and the extremes.
+//
+// # Periodic state
+//
+// The state at phase zero that a period brings back to itself, by Newton's method
+// (Aprille and Trick, Proc. IEEE 60 (1972) 108). The first guess and the
+// preconditioner are the charge balance between the two peaks of the drive, a convex
+// problem for any circuit; the linear equations are solved by carrying changes
+// through the stored factors of the period (Saad and Schultz, SIAM J. Sci. Stat.
+// Comput. 7 (1986) 856). The last corrections keep the mesh of steps, so that the
+// charges of a period come back to 1e-8 of what a diode passes. The network is
+// passive and monotonic: the state is unique wherever something discharges it. Where
+// nothing does, it depends on history, and the state that a vanishing leakage of the
+// diodes would leave is given: a ladder that was once higher stays higher.
+//
+// Errors: two grades of mesh are solved, every bound of the steps tighter in the
+// finer; their difference is reported. A state that is not reached is a lack.
+package network

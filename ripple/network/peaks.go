@@ -1,0 +1,238 @@
+package network
+
+import "math"
+
+// peaks is the charge balance of a circuit between the two peaks of its drive: the
+// potentials at the positive peak (first half of the vectors) and at the negative
+// one (second half), half a period of currents between them. Its matrix is
+// symmetric and the diodes are monotonic, so the solution is the minimum of a
+// convex function, which Newton's method with a line search always reaches. It
+// starts the shooting method from nothing, faults included.
+type peaks struct {
+	*walker
+	pattern *pattern
+	place   []int // by unknown, then those of the negative peak
+	base    []float64
+	factor  []float64
+	pull    []float64 // right-hand side without the diodes
+	y, u, d []float64
+	at      [2]float64 // sine at the peaks
+}
+
+func newPeaks(s *system) *peaks {
+	n := s.n
+	g := newGraph(2 * n)
+	s.spans(func(p *span) {
+		if p.a >= 0 && p.b >= 0 {
+			g.add(p.a, p.b)
+			g.add(n+p.a, n+p.b)
+		}
+	})
+	for _, c := range s.couplings {
+		g.add(c.i, n+c.j)
+		g.add(c.j, n+c.i)
+	}
+	for _, k := range s.inner {
+		g.add(k, n+k)
+	}
+	p := &peaks{walker: newWalker(s), at: [2]float64{1, -1}}
+	p.pattern, p.place = newPattern(g, 2*n)
+	p.base, p.factor = make([]float64, p.pattern.size()), make([]float64, p.pattern.size())
+	p.pull, p.y, p.u, p.d = make([]float64, 2*n), make([]float64, 2*n), make([]float64, 2*n), make([]float64, 2*n)
+	p.on = make([]bool, 2*len(s.diodes))
+	for i := range p.on {
+		p.on[i] = true
+	}
+	p.assemble()
+	return p
+}
+
+// half is the time between the peaks.
+func (p *peaks) half() float64 { return p.period / 2 }
+
+// enter adds a value between two unknowns of one half.
+func (p *peaks) enter(m []float64, s *span, value float64, half int) {
+	if s.a == s.b {
+		return
+	}
+	add := func(k int) {
+		if k >= 0 {
+			m[p.place[k+half*p.n]] += value
+		}
+	}
+	add(s.a)
+	add(s.b)
+	if s.a >= 0 && s.b >= 0 {
+		m[p.pattern.entry(p.place[s.a+half*p.n], p.place[s.b+half*p.n])] -= value
+	}
+}
+
+// assemble fills in what does not depend on the diodes' states.
+func (p *peaks) assemble() {
+	h, n := p.half(), p.n
+	for half := range 2 {
+		for i := range p.capacitors {
+			p.enter(p.base, &p.capacitors[i].span, p.capacitors[i].value, half)
+		}
+		for i := range p.resistors {
+			p.enter(p.base, &p.resistors[i].span, h*p.resistors[i].value, half)
+		}
+		for i := range p.diodes {
+			p.enter(p.base, &p.diodes[i].span, h*p.diodes[i].leak, half)
+		}
+		for i := range p.inductors {
+			l := &p.inductors[i]
+			p.enter(p.base, &l.span, h*h/l.value, half)
+		}
+	}
+	cross := func(i, j int, v float64) { p.base[p.pattern.entry(p.place[i], p.place[n+j])] -= v }
+	for _, k := range p.inner {
+		cross(k, k, p.own[k])
+	}
+	for _, c := range p.couplings {
+		cross(c.i, c.j, -c.value)
+		cross(c.j, c.i, -c.value)
+	}
+	for k := range n {
+		for half := range 2 {
+			s := 1 - 2*float64(half)
+			p.pull[k+half*n] = -(h*(p.condDirect[k]+s*(p.condSquare[k]+p.condSine[k])) + 2*s*(p.capSquare[k]+p.capSine[k]))
+		}
+	}
+	for i := range p.inductors {
+		l := &p.inductors[i]
+		for half := range 2 {
+			s := 1 - 2*float64(half)
+			l.inject(p.pull[half*n:(half+1)*n], -h*h/l.value*l.offset.at(s, s))
+		}
+	}
+}
+
+// over is a diode's voltage beyond its drop at a peak.
+func (p *peaks) over(i, half int, u []float64) float64 {
+	s := 1 - 2*float64(half)
+	return p.diodes[i].volts(u[half*p.n:(half+1)*p.n], s, s) - p.diodes[i].drop
+}
+
+// solve finds the potentials at the peaks.
+func (p *peaks) solve() {
+	for range 200 {
+		p.newton()
+		for k := range p.d {
+			p.d[k] = p.y[k] - p.u[k]
+		}
+		t := p.search()
+		axpy(t, p.d, p.u)
+		p.work.Guesses++
+		if !p.change() && (t == 1 || t < 1e-9) || largest(p.d) <= 1e-8*largest(p.u) {
+			return
+		}
+	}
+}
+
+// newton solves with the diodes as they are.
+func (p *peaks) newton() {
+	h, n := p.half(), p.n
+	copy(p.factor, p.base)
+	copy(p.y, p.pull)
+	for half := range 2 {
+		s := 1 - 2*float64(half)
+		for i := range p.diodes {
+			if d := &p.diodes[i]; p.on[2*i+half] {
+				p.enter(p.factor, &d.span, h*d.on, half)
+				d.inject(p.y[half*n:(half+1)*n], -h*d.on*(d.offset.at(s, s)-d.drop))
+			}
+		}
+	}
+	p.pattern.factoriseReal(p.factor)
+	for k, v := range p.y {
+		p.d[p.place[k]] = v
+	}
+	p.pattern.solveReal(p.factor, p.d)
+	for k := range p.y {
+		p.y[k] = p.d[p.place[k]]
+	}
+}
+
+// passed is the largest charge a diode passes in a period.
+func (p *peaks) passed() float64 {
+	most := 0.0
+	for i := range p.diodes {
+		d, sum := &p.diodes[i], 0.0
+		for half := range 2 {
+			sum += p.half() * d.on * math.Max(0, p.over(i, half, p.u))
+		}
+		most = math.Max(most, sum)
+	}
+	return most
+}
+
+// change brings the diodes' states up to date.
+func (p *peaks) change() (changed bool) {
+	for i := range p.diodes {
+		for half := range 2 {
+			on := p.over(i, half, p.u) > 0
+			changed = changed || on != p.on[2*i+half]
+			p.on[2*i+half] = on
+		}
+	}
+	return changed
+}
+
+// search is the part of the correction at which the convex function is least.
+func (p *peaks) search() float64 {
+	start, curve := p.slope()
+	return leastAlong(func(t float64) float64 {
+		sum := start + curve*t
+		for i := range p.diodes {
+			for half := range 2 {
+				d := &p.diodes[i]
+				rate := d.difference(p.d[half*p.n : (half+1)*p.n])
+				sum += p.half() * d.on * rate * math.Max(0, p.over(i, half, p.u)+t*rate)
+			}
+		}
+		return sum
+	})
+}
+
+// slope is the derivative of the function without the diodes along the correction,
+// and its rate of change.
+func (p *peaks) slope() (start, curve float64) {
+	product := func(i, j int, v float64) {
+		start += v * (p.d[i]*p.u[j] + p.d[j]*p.u[i])
+		curve += v * 2 * p.d[i] * p.d[j]
+	}
+	origin := make([]int, len(p.place))
+	for k, at := range p.place {
+		origin[at] = k
+		start += p.base[at]*p.d[k]*p.u[k] - p.pull[k]*p.d[k]
+		curve += p.base[at] * p.d[k] * p.d[k]
+	}
+	for k := range p.pattern.n {
+		for e := p.pattern.start[k]; e < p.pattern.start[k+1]; e++ {
+			product(origin[k], origin[p.pattern.row[e]], p.base[p.pattern.n+int(e)])
+		}
+	}
+	return start, curve
+}
+
+// answer replaces a change of the state over a period by the correction of the
+// state that this circuit would need: the preconditioner of the shooting method.
+// It is one solution with the factors of the last correction.
+func (p *peaks) answer(r []float64) {
+	n := p.n
+	for k := range p.d {
+		p.d[k] = 0
+	}
+	for k, v := range r {
+		p.d[p.place[k]] = v
+	}
+	p.pattern.solveReal(p.factor, p.d)
+	for k := range n {
+		p.y[k] = p.d[p.place[n+k]]
+	}
+	p.charge(p.y[:n], p.d[:n])
+	for k := range r {
+		r[k] += p.d[k]
+	}
+}

@@ -1,0 +1,84 @@
+package network
+
+import (
+	"kilovet/hv/circuit"
+	"kilovet/hv/quantity"
+)
+
+// Periodic is the periodic state of a circuit: one period of it, from phase zero
+// of the drive.
+type Periodic struct {
+	Circuit   *circuit.Circuit
+	Frequency quantity.Frequency
+	Work      Work
+	// Uncertainty is the largest difference of a capacitor's voltage between this
+	// solution and one on a mesh about half as fine, so a bound of the error with a
+	// wide margin.
+	Uncertainty quantity.Voltage
+	// Assumptions are what was assumed beyond the description, in plain words.
+	Assumptions []string
+
+	track *track
+	amps  []float64
+	on    []bool
+}
+
+// periodic takes the state out of the shooter.
+func (s *shooter) periodic() *Periodic {
+	s.unpack(s.x, s.root, s.q, s.amps)
+	w := s.work
+	w.add(s.pace.work)
+	w.add(s.peaks.work)
+	w.Unknowns, w.States = s.n, s.states()
+	s.pace.track.factors = nil
+	return &Periodic{Circuit: s.c, Frequency: quantity.Frequency(1 / s.period), Work: w, Assumptions: s.assumptions,
+		track: s.pace.track, amps: append([]float64(nil), s.amps...), on: append([]bool(nil), s.on...)}
+}
+
+// Period is the length of the period.
+func (p *Periodic) Period() quantity.Time { return quantity.Time(p.track.period) }
+
+// span is the way between two nodes.
+func (p *Periodic) span(from, to circuit.Node) (span, error) {
+	s := p.track.system
+	if s.frame.loose[from] != s.frame.loose[to] {
+		for _, n := range []circuit.Node{from, to} {
+			if err := s.frame.known(s.c, n); err != nil {
+				return span{}, err
+			}
+		}
+	}
+	f := s.frame
+	return span{s.at(f.group[from]), s.at(f.group[to]), f.offset[from].plus(f.offset[to], -1), -1}, nil
+}
+
+// spanOf is the way across an element.
+func (p *Periodic) spanOf(e *circuit.Element) span {
+	s := p.track.system
+	f := s.frame
+	return span{s.at(f.group[e.From]), s.at(f.group[e.To]), f.offset[e.From].plus(f.offset[e.To], -1), -1}
+}
+
+// startFrom takes the capacitor voltages and inductor currents of another periodic
+// state, by the names of the elements.
+func (s *shooter) startFrom(p *Periodic) {
+	known := map[string]float64{}
+	t := p.track
+	for i := range t.capacitors {
+		c := &t.capacitors[i]
+		known[t.c.Elements[c.element].Name] = c.volts(t.potentials(0, 3), t.steps[0].sign, t.steps[0].sine[3])
+	}
+	s.pace.place(s.q, s.amps, s.on)
+	for k := range s.q {
+		s.q[k] = 0
+	}
+	for i := range s.capacitors {
+		c := &s.capacitors[i]
+		v, ok := known[s.c.Elements[c.element].Name]
+		if !ok {
+			v = c.volts(s.peaks.u[s.n:], -1, -1)
+		}
+		c.inject(s.q, c.value*v)
+	}
+	s.pack(s.q, s.amps, s.root, s.x)
+}

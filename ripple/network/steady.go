@@ -1,0 +1,125 @@
+package network
+
+import (
+	"math"
+
+	"kilovet/hv/circuit"
+	"kilovet/hv/lack"
+	"kilovet/hv/quantity"
+)
+
+// Options of a steady state; the zero value serves.
+type Options struct {
+	// Frequency of the drive; zero takes that of the ladder's own source, or of the
+	// first alternating source. Sources of another frequency are held at zero.
+	Frequency quantity.Frequency
+	// From is a periodic state of a similar circuit to start from.
+	From *Periodic
+}
+
+// idle is the frequency at which a circuit without an alternating source is walked;
+// its state does not depend on it.
+const idle quantity.Frequency = 1
+
+// most is the number of corrections in each grade after which a search ends.
+const most = 40
+
+// Steady finds the periodic state of a circuit under its drive. The error is a lack
+// where a value of the circuit is in doubt, where sources contradict one another,
+// where a load draws current that nothing feeds, or where the state was not reached.
+func Steady(c *circuit.Circuit, o Options) (*Periodic, error) {
+	if err := c.Doubt(); err != nil {
+		return nil, err
+	}
+	frequency := o.Frequency
+	if frequency == 0 {
+		frequency = Drive(c)
+	}
+	s, err := newSystem(c, float64(frequency))
+	if err != nil {
+		return nil, err
+	}
+	h := newShooter(s)
+	h.guess()
+	if o.From != nil {
+		h.startFrom(o.From)
+	}
+	return h.search()
+}
+
+// search goes from the guess to the periodic state.
+func (s *shooter) search() (*Periodic, error) {
+	if err := s.approach(rough, 1e-4, most); err != nil {
+		return nil, err
+	}
+	s.judge(math.Max(s.pace.passed, s.pace.track.passed()))
+	before := append([]float64(nil), s.x...)
+	if err := s.converge(fine, most); err != nil {
+		return nil, err
+	}
+	p := s.periodic()
+	p.Uncertainty = quantity.Voltage(s.apart(before, s.x))
+	return p, p.plausible()
+}
+
+// Drive is the frequency of a circuit's drive: of the first alternating source of
+// the ladder, else of any. Without one it is 1 Hz, and nothing depends on it.
+func Drive(c *circuit.Circuit) quantity.Frequency {
+	var f quantity.Frequency
+	for i := range c.Elements {
+		e := &c.Elements[i]
+		if e.Kind != circuit.Source || e.Wave.Form == circuit.Direct || e.Wave.Frequency <= 0 {
+			continue
+		}
+		if e.Role == circuit.Ladder {
+			return e.Wave.Frequency
+		}
+		if f == 0 {
+			f = e.Wave.Frequency
+		}
+	}
+	if f == 0 {
+		return idle
+	}
+	return f
+}
+
+// apart is the largest difference of a capacitor's voltage between two states.
+func (s *shooter) apart(x, y []float64) float64 {
+	u := [2][]float64{make([]float64, s.n), make([]float64, s.n)}
+	for i, z := range [][]float64{x, y} {
+		s.unpack(z, s.root, s.q, s.amps)
+		s.pace.place(s.q, s.amps, s.on)
+		s.pace.try(s.grain)
+		copy(u[i], s.pace.stage[2])
+	}
+	worst := 0.0
+	for i := range s.capacitors {
+		c := &s.capacitors[i]
+		worst = max(worst, abs(c.difference(u[0])-c.difference(u[1])))
+	}
+	return worst
+}
+
+// plausible refuses a state that only the assumed leakage of the diodes keeps
+// finite: a load that draws current nothing feeds.
+func (p *Periodic) plausible() error {
+	drawn := 0.0
+	for i := range p.track.sinks {
+		drawn = max(drawn, abs(p.track.sinks[i].value))
+	}
+	for i := range p.track.diodes {
+		d := &p.track.diodes[i]
+		if v := float64(p.swing(&d.span).Peak()); d.assumed && v > 100*p.track.scale && v*d.leak > 1e-3*drawn && drawn > 0 {
+			return lack.Failed("a load draws current that only the leakage of %s could feed", p.Circuit.Elements[d.element].Name)
+		}
+	}
+	return nil
+}
+
+func abs(x float64) float64 {
+	if x < 0 {
+		return -x
+	}
+	return x
+}

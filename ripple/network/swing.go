@@ -1,0 +1,121 @@
+package network
+
+import (
+	"math"
+
+	"kilovet/hv/circuit"
+	"kilovet/hv/quantity"
+)
+
+// Swing is how a voltage moves over a period; Least and Greatest carry their sign
+// and are found between the steps too.
+type Swing struct{ Mean, Least, Greatest quantity.Voltage }
+
+// PeakToPeak is the ripple.
+func (s Swing) PeakToPeak() quantity.Voltage { return s.Greatest - s.Least }
+
+// Peak is the largest magnitude.
+func (s Swing) Peak() quantity.Voltage { return max(s.Greatest, -s.Least) }
+
+// At is the potential of a node to ground. It is a lack where nothing ties the node
+// to ground.
+func (p *Periodic) At(n circuit.Node) (Swing, error) { return p.Between(n, circuit.Ground) }
+
+// Between is the voltage from one node to another.
+func (p *Periodic) Between(from, to circuit.Node) (Swing, error) {
+	s, err := p.span(from, to)
+	if err != nil {
+		return Swing{}, err
+	}
+	return p.swing(&s), nil
+}
+
+// Across is the voltage across an element, from From to To.
+func (p *Periodic) Across(name string) Swing {
+	s := p.spanOf(p.element(name))
+	return p.swing(&s)
+}
+
+func (p *Periodic) element(name string) *circuit.Element {
+	e := p.Circuit.Element(name)
+	if e == nil {
+		panic("network: no element " + name)
+	}
+	return e
+}
+
+func (p *Periodic) swing(s *span) Swing {
+	w := Swing{Least: quantity.Voltage(math.Inf(1)), Greatest: quantity.Voltage(math.Inf(-1))}
+	sum := 0.0
+	for k := range p.track.steps {
+		y := p.track.stages(k, s)
+		for j, c := range share {
+			sum += c * p.track.steps[k].length * y[j+1]
+		}
+		low, high := y.extremes(p.track.steps[k].euler)
+		w.Least, w.Greatest = min(w.Least, quantity.Voltage(low)), max(w.Greatest, quantity.Voltage(high))
+	}
+	w.Mean = quantity.Voltage(sum / p.track.period)
+	return w
+}
+
+// samples are a quantity at the start and the stages of a step.
+type samples [4]float64
+
+// stages are the voltages across a span in one step.
+func (t *track) stages(step int, s *span) samples {
+	var y samples
+	st := &t.steps[step]
+	for j := range y {
+		y[j] = s.volts(t.potentials(step, j), st.sign, st.sine[j])
+	}
+	return y
+}
+
+// polynomial is the quantity over the step; where the diodes settled
+// only the end is known.
+func (y *samples) polynomial(euler bool) cubic {
+	if euler {
+		return cubic{y[3], 0, 0, 0}
+	}
+	return through(y[0], y[1], y[2], y[3])
+}
+
+// extremes is the least and greatest value over the step.
+func (y *samples) extremes(euler bool) (low, high float64) {
+	p := y.polynomial(euler)
+	low, high = math.Inf(1), math.Inf(-1)
+	for _, x := range p.turns() {
+		v := p.at(x)
+		low, high = math.Min(low, v), math.Max(high, v)
+	}
+	return math.Min(low, p[0]), math.Max(high, p[0])
+}
+
+// Point is a voltage at an instant of the period.
+type Point struct {
+	Time    quantity.Time
+	Voltage quantity.Voltage
+}
+
+// Wave is the wave-form of the voltage between two nodes: the start and the stages
+// of every step, the instants at which diodes switch among them.
+func (p *Periodic) Wave(from, to circuit.Node) ([]Point, error) {
+	s, err := p.span(from, to)
+	if err != nil {
+		return nil, err
+	}
+	points := make([]Point, 0, 3*len(p.track.steps))
+	for k := range p.track.steps {
+		st := &p.track.steps[k]
+		y := p.track.stages(k, &s)
+		if st.euler {
+			points = append(points, Point{quantity.Time(st.start), quantity.Voltage(y[3])})
+			continue
+		}
+		for j, c := range [3]float64{node1, node2, 1} {
+			points = append(points, Point{quantity.Time(st.start + c*st.length), quantity.Voltage(y[j+1])})
+		}
+	}
+	return points, nil
+}

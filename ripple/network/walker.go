@@ -1,0 +1,244 @@
+package network
+
+import (
+	"math"
+	"math/cmplx"
+)
+
+// walker carries a circuit through time, one step after another. Its state is the
+// charge of every unknown and the current of every inductor: both go on through
+// any switching and any jump of a source, so nothing has to be made consistent.
+type walker struct {
+	*system
+	time   float64
+	sign   float64    // of the square wave
+	wave   complex128 // cos ωt + j sin ωt as the method carries it
+	q      []float64
+	amps   []float64
+	u      []float64 // potentials at the end of the last step
+	on     []bool    // by diode
+	steady []float64 // direct currents under the present switching
+	held   []float64 // charge of the direct and square offsets
+	matrix []float64 // G under the present switching
+
+	factor  []trio // of the trial step
+	lanes   []trio
+	stage   [3][]float64 // potentials at the stages
+	branch  [3][]float64 // inductor currents at the stages
+	sine    [4]float64   // at the start and the stages
+	next    complex128
+	poleLow complex128 // sine seen at the complex pole
+	poleR   float64    // and at the real one
+	smooth  bool       // events are located as well as the arithmetic allows
+	slack   []float64  // by diode: the excess that does not count
+	work    Work
+}
+
+func newWalker(s *system) *walker {
+	w := &walker{system: s, sign: 1, wave: 1}
+	w.q, w.u, w.steady, w.held = make([]float64, s.n), make([]float64, s.n), make([]float64, s.n), make([]float64, s.n)
+	w.amps, w.on = make([]float64, len(s.inductors)), make([]bool, len(s.diodes))
+	w.matrix, w.slack = make([]float64, s.pattern.size()), make([]float64, len(s.diodes))
+	w.factor, w.lanes = make([]trio, s.pattern.size()), make([]trio, s.n)
+	for j := range w.stage {
+		w.stage[j], w.branch[j] = make([]float64, s.n), make([]float64, len(s.inductors))
+	}
+	return w
+}
+
+// place puts the walker at the start of a period.
+func (w *walker) place(q, amps []float64, on []bool) {
+	copy(w.q, q)
+	copy(w.amps, amps)
+	copy(w.on, on)
+	w.time, w.sign, w.wave = 0, 1, 1
+	w.switched()
+}
+
+// switched renews what depends on the diodes that conduct and on the square wave.
+func (w *walker) switched() {
+	copy(w.matrix, w.cond)
+	for k := range w.steady {
+		w.steady[k] = w.condDirect[k] + w.sign*w.condSquare[k]
+		w.held[k] = w.capDirect[k] + w.sign*w.capSquare[k]
+	}
+	for i := range w.diodes {
+		if d := &w.diodes[i]; w.on[i] {
+			w.enter(w.matrix, &d.span, d.on)
+			if d.a != d.b {
+				d.inject(w.steady, d.on*(d.offset.direct+w.sign*d.offset.square-d.drop))
+			}
+		}
+	}
+}
+
+// try takes a step of a given length without making it the state.
+func (w *walker) try(h float64) {
+	w.work.Factorisations++
+	w.turn(h)
+	w.fill(h)
+	w.pattern.factorise(w.factor)
+	w.load(h)
+	w.pattern.solve(w.factor, w.lanes)
+	w.spread(h)
+}
+
+// turn carries the sine through the step: seen at the poles and at the stages.
+func (w *walker) turn(h float64) {
+	z := exact(w.omega * h)
+	w.sine[0] = imag(w.wave)
+	for j, c := range [3]float64{node1, node2, 1} {
+		w.next = stageOf(c, z) * w.wave
+		w.sine[j+1] = imag(w.next)
+	}
+	w.poleR = imag(w.wave / (poleR - z))
+	p := complex(poleA, poleB)
+	w.poleLow = (w.wave/(p-z) - cmplx.Conj(w.wave)/(p-cmplx.Conj(z))) / 2i
+}
+
+// fill sets up p C + h G + h²/(p L) in the three lanes.
+func (w *walker) fill(h float64) {
+	for k, c := range w.cap {
+		g := h * w.matrix[k]
+		w.factor[k] = trio{poleR*c + g, poleA*c + g, poleB * c}
+	}
+	if len(w.inductors) == 0 {
+		return
+	}
+	inv := 1 / complex(poleA, poleB)
+	for k, l := range w.coil {
+		f := &w.factor[k]
+		f.r += h * h * l / poleR
+		f.a += h * h * l * real(inv)
+		f.b += h * h * l * imag(inv)
+	}
+}
+
+// load sets up the right-hand sides.
+func (w *walker) load(h float64) {
+	inv := 1 / complex(poleA, poleB)
+	ga, gb := h*real(inv), h*imag(inv)
+	p := complex(poleA, poleB) * w.poleLow
+	for k, q := range w.q {
+		q -= w.held[k]
+		g, c, i := w.steady[k], w.capSine[k], h*w.condSine[k]
+		w.lanes[k] = trio{
+			q - h/poleR*g - (poleR*c+i)*w.poleR,
+			q - ga*g - (real(p)*c + real(w.poleLow)*i),
+			-gb*g - (imag(p)*c + imag(w.poleLow)*i),
+		}
+	}
+	for i := range w.inductors {
+		x := w.coilCurrent(i, h, trio{})
+		w.inductors[i].injectTrio(w.lanes, trio{-h * x.r, -h * x.a, -h * x.b})
+	}
+}
+
+// coilCurrent is an inductor's current at the poles, for a difference v of the
+// potentials at its ends at the poles: (i₀ + h v/L)/p.
+func (w *walker) coilCurrent(i int, h float64, v trio) trio {
+	l := &w.inductors[i]
+	inv := 1 / complex(poleA, poleB)
+	direct := l.offset.direct + w.sign*l.offset.square
+	r := (w.amps[i] + h/l.value*(v.r+direct/poleR+l.offset.sine*w.poleR)) / poleR
+	c := complex(direct, 0)*inv + complex(l.offset.sine, 0)*w.poleLow + complex(v.a, v.b)
+	c = (complex(w.amps[i], 0) + complex(h/l.value, 0)*c) * inv
+	return trio{r, real(c), imag(c)}
+}
+
+func (s *span) injectTrio(y []trio, i trio) {
+	if s.a >= 0 {
+		e := &y[s.a]
+		e.r, e.a, e.b = e.r+i.r, e.a+i.a, e.b+i.b
+	}
+	if s.b >= 0 {
+		e := &y[s.b]
+		e.r, e.a, e.b = e.r-i.r, e.a-i.a, e.b-i.b
+	}
+}
+
+func (s *span) differenceTrio(y []trio) trio {
+	var v trio
+	if s.a >= 0 {
+		v = y[s.a]
+	}
+	if s.b >= 0 {
+		e := y[s.b]
+		v = trio{v.r - e.r, v.a - e.a, v.b - e.b}
+	}
+	return v
+}
+
+// spread makes the stages from the solutions at the poles.
+func (w *walker) spread(h float64) {
+	s1, s2, s3 := w.stage[0], w.stage[1], w.stage[2]
+	for k := range w.lanes {
+		x := &w.lanes[k]
+		s1[k], s2[k], s3[k] = residue[0].of(x), residue[1].of(x), residue[2].of(x)
+	}
+	for i := range w.inductors {
+		x := w.coilCurrent(i, h, w.inductors[i].differenceTrio(w.lanes))
+		for j := range w.branch {
+			w.branch[j][i] = residue[j].of(&x)
+		}
+	}
+}
+
+// accept makes the end of the trial step the state.
+func (w *walker) accept(h float64) {
+	w.work.Steps++
+	w.time += h
+	w.wave = w.next
+	copy(w.u, w.stage[2])
+	copy(w.amps, w.branch[2])
+	w.charge(w.u, w.q)
+	s := imag(w.wave)
+	for k := range w.q {
+		w.q[k] += w.held[k] + w.capSine[k]*s
+	}
+}
+
+// roughness is how far the collocation polynomial bends away from the parabola at
+// the start of the trial step, in the norm of energy: for an exponential e^z it is
+// z³/60 while the step errs by z⁶/7200, and for what the step passes over it is the
+// size of that. The energy the method loses is this squared (algebraic stability).
+func (w *walker) roughness() float64 {
+	sum := 0.0
+	u1, u2, u3 := w.stage[0], w.stage[1], w.stage[2]
+	for i := range w.capacitors {
+		c := &w.capacitors[i]
+		if c.a == c.b {
+			continue
+		}
+		d := c.difference(w.u) - back(c.difference(u1), c.difference(u2), c.difference(u3))
+		d += c.offset.sine * (w.sine[0] - back(w.sine[1], w.sine[2], w.sine[3]))
+		sum += math.Min(c.value, w.typical) * d * d
+	}
+	for i := range w.inductors {
+		d := w.amps[i] - back(w.branch[0][i], w.branch[1][i], w.branch[2][i])
+		sum += w.inductors[i].value * d * d
+	}
+	return math.Sqrt(sum)
+}
+
+// excess is how far a diode has gone beyond its present state over the trial step,
+// as a cubic: the voltage above the drop while open, below it while conducting.
+func (w *walker) excess(i int) cubic {
+	d := &w.diodes[i]
+	y0 := d.volts(w.u, w.sign, w.sine[0]) - d.drop
+	y1 := d.volts(w.stage[0], w.sign, w.sine[1]) - d.drop
+	y2 := d.volts(w.stage[1], w.sign, w.sine[2]) - d.drop
+	y3 := d.volts(w.stage[2], w.sign, w.sine[3]) - d.drop
+	if w.on[i] {
+		y0, y1, y2, y3 = -y0, -y1, -y2, -y3
+	}
+	return through(y0, y1, y2, y3)
+}
+
+// tolerate sets the excess of the diodes that does not count: what makes a part of
+// 1e-4 of the mean current, or what the arithmetic leaves.
+func (w *walker) tolerate(current float64) {
+	for i := range w.diodes {
+		w.slack[i] = math.Max(1e-4*current/w.diodes[i].on, 1e-10*w.scale)
+	}
+}

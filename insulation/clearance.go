@@ -26,6 +26,9 @@ const scope quantity.Voltage = 1500
 // pollution degree or altitude, and in other gases there is a lack.
 func ClearanceNeeded(g gap.Gap, v gap.Voltages) (gap.Answer[quantity.Length], error) {
 	var none gap.Answer[quantity.Length]
+	if clearance := mediumOf(g).clearance; clearance != nil {
+		return clearance(g, v)
+	}
 	if err := inAir(g); err != nil {
 		return none, err
 	}

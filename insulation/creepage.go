@@ -15,6 +15,9 @@ import (
 // in air there is a lack.
 func CreepageNeeded(g gap.Gap, v gap.Voltages) (gap.Answer[quantity.Length], error) {
 	var none gap.Answer[quantity.Length]
+	if creepage := mediumOf(g).creepage; creepage != nil {
+		return creepage(g, v)
+	}
 	if err := inAir(g); err != nil {
 		return none, err
 	}

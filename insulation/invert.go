@@ -147,13 +147,16 @@ func crossingOf(lo, hi, want float64, f func(float64) (float64, error)) (quantit
 		return math.Log(y / want), err
 	}
 	top := 1 + math.Log(hi/lo)
-	for u, even := range map[float64]string{1: "more", top: "less"} {
-		y, err := excess(u)
+	for _, end := range []struct {
+		u    float64
+		even string
+	}{{1, "more"}, {top, "less"}} {
+		y, err := excess(end.u)
 		if err != nil {
 			return 0, err
 		}
-		if (y > 0) == (even == "more") && y != 0 {
-			return 0, lack.Range("even %s, the end of the law, gives %s than is asked for", quantity.Text(quantity.Length(lo*math.Exp(u-1))), even)
+		if (y > 0) == (end.even == "more") && y != 0 {
+			return 0, lack.Range("even %s, the end of the law, gives %s than is asked for", quantity.Text(quantity.Length(lo*math.Exp(end.u-1))), end.even)
 		}
 	}
 	u, err := solve.Rise(1, top, excess)

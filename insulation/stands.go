@@ -9,7 +9,6 @@ import (
 	"kilovet/insulation/gas"
 	"kilovet/insulation/shape"
 	"kilovet/insulation/table"
-	"kilovet/insulation/vacuum"
 )
 
 // FieldPeak is the highest field of the shape at the peak voltage, exact for the ideal
@@ -65,8 +64,8 @@ func lineOf(g gap.Gap) (shape.Line, error) {
 // electrodes discharge from about 2 kV on.
 func Onset(g gap.Gap) (gap.Answer[quantity.Voltage], error) {
 	var none gap.Answer[quantity.Voltage]
-	if g.Medium == gap.Vacuum {
-		return vacuum.Onset(g)
+	if onset := mediumOf(g).onset; onset != nil {
+		return onset(g)
 	}
 	if err := inGas(g); err != nil {
 		return none, err
@@ -118,8 +117,8 @@ func Breakdown(g gap.Gap, sharp gap.Polarity) (gap.Answer[quantity.Voltage], err
 
 func breakdown(g gap.Gap, sharp gap.Polarity, starts gap.Result[quantity.Voltage]) (gap.Answer[quantity.Voltage], error) {
 	var none gap.Answer[quantity.Voltage]
-	if g.Medium == gap.Vacuum {
-		return vacuum.Breakdown(g)
+	if breakdown := mediumOf(g).breakdown; breakdown != nil {
+		return breakdown(g)
 	}
 	if err := inGas(g); err != nil {
 		return none, err

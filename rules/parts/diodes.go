@@ -39,7 +39,7 @@ var diodeCurrent = rule.Rule{
 	Concern: rule.Equipment,
 	Sources: []rule.Source{limits.DiodeCurrent.Source},
 	Example: rule.Example{
-		Swaps:   []rule.Swap{{Was: `rated_current = "5 mA"`, Becomes: `rated_current = "100 uA"`}},
+		Swaps:   []rule.Swap{{Was: `rated_current = "5 mA"`, Becomes: `rated_current = "80 uA"`}},
 		Changes: []rule.Change{{Rule: "diode.mean_current", Subject: "multiplier.diode", Verdict: rule.Fails}},
 	},
 	Judge: func(e *evidence.Evidence) rule.Judgement {

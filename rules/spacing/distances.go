@@ -17,8 +17,8 @@ const distanceMargin = 0.10
 
 var clearance = rule.Rule{
 	ID: "spacing.clearance", Title: "Clearance",
-	Demands: "The distance through air is at least what the tables ask for at the highest voltage over states and corners.",
-	Applies: "Every spacing in air or on a printed board; in other media the breakdown estimate decides.",
+	Demands: "The distance through the medium is at least what the tables ask for at the highest voltage over states and corners; in vacuum, oil and solids what working stress asks for.",
+	Applies: "Every spacing but those in gases other than air, where the breakdown estimate decides.",
 	Margin:  "marginal with less than 10 % in hand",
 	Concern: rule.Life,
 	Sources: []rule.Source{
@@ -31,8 +31,8 @@ var clearance = rule.Rule{
 	},
 	Judge: func(e *evidence.Evidence) rule.Judgement {
 		return each(e, func(s *chain.Spacing) (rule.Finding, string) {
-			if !inAir(s) {
-				return rule.Finding{}, "the tables of clearances are those of air"
+			if otherGas(s) {
+				return rule.Finding{}, "no table asks for a clearance in gases other than air: the breakdown estimate decides"
 			}
 			return distance(e, s, "spacing.clearance", s.Clearance, func(x evidence.Spacing) gap.Result[quantity.Length] { return x.Assessment.ClearanceNeeded }), ""
 		})
@@ -42,7 +42,7 @@ var clearance = rule.Rule{
 var creepage = rule.Rule{
 	ID: "spacing.creepage", Title: "Creepage distance",
 	Demands: "The distance along the surface is at least what the tables ask for at the highest lasting voltage, and never less than the clearance needed.",
-	Applies: "Every spacing in air or on a printed board.",
+	Applies: "Every spacing in air or on a printed board, and surfaces in vacuum where a creepage distance is given.",
 	Margin:  "marginal with less than 10 % in hand",
 	Concern: rule.Life,
 	Sources: []rule.Source{{Text: "IEC 60664-1:2020 Table F.5", Mark: rule.Read, Governs: true}},
@@ -52,13 +52,15 @@ var creepage = rule.Rule{
 	},
 	Judge: func(e *evidence.Evidence) rule.Judgement {
 		return each(e, func(s *chain.Spacing) (rule.Finding, string) {
-			if !inAir(s) {
-				return rule.Finding{}, "the tables of creepage are those of surfaces in air"
+			if !inAir(s) && !(s.Medium.V == "vacuum" && s.Creepage.Set()) {
+				return rule.Finding{}, "creepage is judged on surfaces in air, and in vacuum where one is given"
 			}
 			return distance(e, s, "spacing.creepage", s.Creepage, func(x evidence.Spacing) gap.Result[quantity.Length] { return x.Assessment.CreepageNeeded }), ""
 		})
 	},
 }
+
+func otherGas(s *chain.Spacing) bool { return s.Medium.V == "gas" && s.Gas.Or("air") != "air" }
 
 func inAir(s *chain.Spacing) bool {
 	return s.Medium.V == "air" || s.Medium.V == "printed board" || s.Medium.V == "gas" && s.Gas.Or("air") == "air"

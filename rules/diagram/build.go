@@ -109,7 +109,7 @@ func (b *builder) rail() []Span {
 	}
 	rail = append(rail, Span{Node: b.node("supply")})
 	if cable := b.part("cable"); cable != nil {
-		rail = append(rail, Span{Series: cable, Node: Node{Name: "cable"}}) // its far end, of no name
+		rail = append(rail, Span{Series: cable}) // its far end has no name
 	}
 	return append(rail, Span{Series: b.part("cable.gun_end_resistor"), Node: b.node("output")})
 }

@@ -81,7 +81,7 @@ type Column struct {
 // node, and what hangs there.
 type Span struct {
 	Series  *Part // nil where nothing lies between
-	Node    Node
+	Node    Node  // without a name where the description gives none
 	Hanging []Hanging
 }
 
@@ -124,44 +124,31 @@ type Mark struct {
 // Parts lists every part of the diagram.
 func (d *Diagram) Parts() []*Part {
 	var all []*Part
-	add := func(parts []Part) {
-		for i := range parts {
-			all = append(all, &parts[i])
-		}
-	}
 	for i := range d.Ladder.Columns {
 		c := &d.Ladder.Columns[i]
 		all = append(all, &c.Source)
 		for _, parts := range [][]Part{c.Series, c.Coupling, c.Lower, c.Upper} {
-			add(parts)
+			all = append(all, each(parts)...)
 		}
 	}
-	add(d.Ladder.Smoothing)
+	all = append(all, each(d.Ladder.Smoothing)...)
 	for _, s := range d.Rail {
 		all = appendThere(all, s.Series)
 		for _, h := range s.Hanging {
-			add(h.Parts)
-			add(h.Beside)
+			all = append(append(all, each(h.Parts)...), each(h.Beside)...)
 		}
 	}
 	all = append(all, d.Gun.parts()...)
-	add(d.Loose)
-	return all
+	return append(all, each(d.Loose)...)
 }
 
 func (g *Gun) parts() []*Part {
 	if g == nil {
 		return nil
 	}
-	var all []*Part
-	for i := range g.Bias {
-		all = append(all, &g.Bias[i])
-	}
-	all = appendThere(all, g.Emission)
+	all := appendThere(each(g.Bias), g.Emission)
 	if h := g.Heater; h != nil {
-		for i := range h.Centre {
-			all = append(all, &h.Centre[i])
-		}
+		all = append(all, each(h.Centre)...)
 		all = appendThere(all, &h.Supply, h.Feed, h.Mains, h.Stray)
 	}
 	return all
@@ -176,33 +163,41 @@ func appendThere(all []*Part, parts ...*Part) []*Part {
 	return all
 }
 
-// Nodes lists every node of the diagram that bears a name of its own.
+// Nodes lists every node of the diagram that has a name.
 func (d *Diagram) Nodes() []*Node {
 	var all []*Node
-	add := func(nodes []Node) {
-		for i := range nodes {
-			all = append(all, &nodes[i])
-		}
-	}
-	for i := range d.Ladder.Columns {
-		all = append(all, &d.Ladder.Columns[i].Drive)
-		add(d.Ladder.Columns[i].Nodes)
-	}
-	add(d.Ladder.Stages)
-	for i := range d.Rail {
-		s := &d.Rail[i]
-		all = append(all, &s.Node)
-		for j := range s.Hanging {
-			if s.Hanging[j].Tap.Name != "" {
-				all = append(all, &s.Hanging[j].Tap)
+	add := func(nodes ...*Node) {
+		for _, n := range nodes {
+			if n.Name != "" {
+				all = append(all, n)
 			}
 		}
 	}
-	if g := d.Gun; g != nil {
-		all = append(all, &g.Control, &g.Cathode)
-		if g.Heater != nil {
-			all = append(all, &g.Heater.A, &g.Heater.B)
+	for i := range d.Ladder.Columns {
+		add(&d.Ladder.Columns[i].Drive)
+		add(each(d.Ladder.Columns[i].Nodes)...)
+	}
+	add(each(d.Ladder.Stages)...)
+	for i := range d.Rail {
+		add(&d.Rail[i].Node)
+		for j := range d.Rail[i].Hanging {
+			add(&d.Rail[i].Hanging[j].Tap)
 		}
+	}
+	if g := d.Gun; g != nil {
+		add(&g.Control, &g.Cathode)
+		if g.Heater != nil {
+			add(&g.Heater.A, &g.Heater.B)
+		}
+	}
+	return all
+}
+
+// each lists the members of a slice by their address.
+func each[T any](list []T) []*T {
+	all := make([]*T, len(list))
+	for i := range list {
+		all[i] = &list[i]
 	}
 	return all
 }

@@ -103,6 +103,9 @@ func networkCases(t *testing.T) []networkCase {
 // TestLaddersThroughTheWholeTool describes each reference ladder, reviews it, and
 // wants the figures of the simulation within the stated bounds.
 func TestLaddersThroughTheWholeTool(t *testing.T) {
+	if testing.Short() {
+		t.Skip("start-up of long ladders; the ordinary run has them")
+	}
 	for _, c := range networkCases(t) {
 		t.Run(c.ID, func(t *testing.T) {
 			r := reviewed(t, []byte(c.description()))

@@ -68,6 +68,9 @@ func TestFiguresAreDeclaredOnce(t *testing.T) {
 // TestExamples applies each rule's example to the description it changes and wants
 // the whole set of findings that differ, no more and no less.
 func TestExamples(t *testing.T) {
+	if testing.Short() {
+		t.Skip("forty reviews; the ordinary run has them")
+	}
 	base := map[string]map[string]rule.Verdict{}
 	for _, r := range rules.All() {
 		name := r.Example.Of

@@ -9,6 +9,7 @@ import (
 	"kilovet/hv/lack"
 	"kilovet/hv/quantity"
 	"kilovet/ripple/cascade"
+	"kilovet/ripple/network"
 )
 
 // NoLoad is 2 N (peak − forward drop) at the drive of the condition.
@@ -231,9 +232,33 @@ func (e *Evidence) InputPower() (quantity.Power, error) {
 	return s.InputPower(), nil
 }
 
-// RiseTime is from discharged at full drive to 95 % of the final mean.
+// RiseTime is from discharged to 95 % of the final mean at the top of the multiplier,
+// at full drive with the loads on and without regulation.
 func (e *Evidence) RiseTime() (quantity.Time, error) {
-	return 0, lack.Failed("the rise time needs the network in time")
+	s, err := e.Start()
+	if err != nil {
+		return 0, err
+	}
+	return s.Reached, nil
+}
+
+// Start is the start at full drive, without regulation, and what the parts bear in it.
+func (e *Evidence) Start() (*network.Startup, error) {
+	return remember(e, "start", func() (*network.Startup, error) {
+		c, err := e.circuitAt(e.chain.Drive.Peak.V)
+		if err != nil {
+			return nil, err
+		}
+		p, err := e.solve(c, nil)
+		if err != nil {
+			return nil, err
+		}
+		top, err := p.node("multiplier")
+		if err != nil {
+			return nil, err
+		}
+		return network.Start(p.Periodic, network.StartOptions{Node: top})
+	})
 }
 
 // StateAssumptions are what the steady state takes for granted.

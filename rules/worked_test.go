@@ -1,0 +1,134 @@
+package rules_test
+
+import (
+	"bytes"
+	"math"
+	"regexp"
+	"strings"
+	"testing"
+
+	"kilovet/rules"
+	"kilovet/rules/rule"
+)
+
+// figureOf finds a figure of the working state.
+func figureOf(t *testing.T, r *rules.Review, id, subject string) float64 {
+	t.Helper()
+	for _, f := range r.Figures {
+		if f.ID == id && f.Subject == subject && (f.State == "working" || f.State == "") {
+			return f.Value
+		}
+	}
+	t.Fatalf("%s %s is not listed", id, subject)
+	return 0
+}
+
+func within(t *testing.T, what string, got, want, tolerance float64) {
+	t.Helper()
+	if math.Abs(got-want) > tolerance*math.Abs(want) {
+		t.Errorf("%s = %.8g, want %.8g within %g", what, got, want, tolerance)
+	}
+}
+
+const stiff = `format = 1
+[drive]
+waveform = "sine"
+frequency = "50 kHz"
+peak = "2.5 kV"
+[multiplier]
+topology = "half-wave"
+polarity = "negative"
+stages = 1
+coupling_capacitor = { value = "1 uF" }
+smoothing_capacitor = { value = "1 uF" }
+diode = { rated_voltage = "10 kV", forward_drop = "0 V", resistance = "1 ohm" }
+`
+
+// TestSelfBiasedGun: common practice, no source: 2 Mohm at 200 µA stand about 400 V,
+// so that the cathode of a 5 kV gun is about 4.6 kV below its earthed anode; 10 Mohm at
+// 100 µA make 1 kV.
+func TestSelfBiasedGun(t *testing.T) {
+	for _, c := range []struct {
+		resistor, emission string
+		bias               float64
+	}{{"2 Mohm", "200 uA", 400}, {"10 Mohm", "100 uA", 1000}} {
+		r := reviewed(t, []byte(stiff+`
+[bias]
+kind = "self"
+resistor = { value = "`+c.resistor+`" }
+[gun]
+emission = "`+c.emission+`"
+`))
+		within(t, "bias", figureOf(t, r, "bias.voltage", ""), c.bias, 1e-9)
+		within(t, "control electrode", figureOf(t, r, "potential", "control"), -5000, 1e-3)
+		within(t, "cathode", figureOf(t, r, "potential", "cathode"), -5000+c.bias, 1e-3)
+		within(t, "beam energy", figureOf(t, r, "beam.energy", ""), 5000-c.bias, 1e-3)
+	}
+}
+
+// TestDischargeOfOneCapacitor: t = R C ln(U/60 V); smoothing and coupling capacitor
+// together, since the diode from one to the other conducts.
+func TestDischargeOfOneCapacitor(t *testing.T) {
+	r := reviewed(t, []byte(strings.Replace(stiff, "1 uF\" }\ndiode", "1 nF\" }\ndiode", 1)+`
+[[bleeder]]
+at = "output"
+resistor = { value = "1 Gohm" }
+permanent = true
+`))
+	// The coupling capacitor of 1 µF holds 2.5 kV and feeds the output below that.
+	slow := 1e9 * (1e-6 + 1e-9) * math.Log(2500/60.)
+	fast := 1e9 * 1e-9 * math.Log(2)
+	within(t, "time", figureOf(t, r, "stored.discharge_time", "output"), fast+slow, 1e-2)
+}
+
+// TestUnpluggedPathsDoNotCount: the same bleeder not marked permanent discharges nothing.
+func TestUnpluggedPathsDoNotCount(t *testing.T) {
+	r := reviewed(t, []byte(stiff+`
+[[bleeder]]
+at = "output"
+resistor = { value = "1 Gohm" }
+[access]
+waiting_time = "1 h"
+`))
+	for _, f := range r.Figures {
+		if f.ID == "stored.discharge_time" && f.Subject == "output" {
+			t.Errorf("the output is said to be discharged after %g s", f.Value)
+		}
+	}
+	for _, f := range r.Findings {
+		if f.Rule == "discharge.waiting_time" && f.Verdict != rule.Fails {
+			t.Errorf("what never discharges %s", f.Verdict)
+		}
+	}
+}
+
+// TestClassTwoNeedsItsValueAtVoltage: without it no figure rests on the capacitance.
+func TestClassTwoNeedsItsValueAtVoltage(t *testing.T) {
+	data := strings.Replace(stiff, `smoothing_capacitor = { value = "1 uF" }`, `smoothing_capacitor = { value = "1 uF", dielectric = "X7R" }`, 1)
+	r := reviewed(t, []byte(data+"[[load]]\nname = \"l\"\nat = \"output\"\ncurrent = \"10 uA\"\n"))
+	for _, f := range r.Figures {
+		if strings.HasPrefix(f.ID, "multiplier.") && f.ID != "multiplier.no_load" && f.ID != "multiplier.stages_for_most_output" {
+			t.Errorf("%s is listed all the same", f.ID)
+		}
+	}
+	if r.Verdict != rule.Unassessed && r.Verdict != rule.Fails {
+		t.Errorf("the review %s", r.Verdict)
+	}
+}
+
+// TestAbsentTablesNeverPass takes one table after another out of the sound column:
+// what a rule needs is then unassessed or fails.
+func TestAbsentTablesNeverPass(t *testing.T) {
+	data := described(t, "column")
+	for _, table := range []string{"site", "access", "protection", "vacuum", "regulation", "heater"} {
+		cut := regexp.MustCompile(`(?ms)^\[`+table+`\]\n.*?^\[`).ReplaceAll(data, []byte("["))
+		if bytes.Equal(cut, data) {
+			t.Fatalf("there is no [%s]", table)
+		}
+		r := reviewed(t, cut)
+		passes := r.Verdict == rule.Meets || r.Verdict == rule.Marginal
+		if optional := table == "regulation" || table == "heater"; passes != optional {
+			t.Errorf("without [%s] the review %s", table, r.Verdict)
+		}
+	}
+}

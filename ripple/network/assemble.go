@@ -100,8 +100,9 @@ type coupling struct {
 	value float64
 }
 
-// newSystem compiles a circuit for a drive frequency.
-func newSystem(c *circuit.Circuit, frequency float64) (*system, error) {
+// newSystem compiles a circuit for a drive frequency. Diodes without leakage are
+// given one that takes off their capacitance at a rate, in 1/s.
+func newSystem(c *circuit.Circuit, frequency, leak float64) (*system, error) {
 	f, err := newFrame(c, frequency)
 	if err != nil {
 		return nil, err
@@ -113,7 +114,7 @@ func newSystem(c *circuit.Circuit, frequency float64) (*system, error) {
 	s.collect()
 	s.typify()
 	s.arrange()
-	s.rectify()
+	s.rectify(leak)
 	s.stamp()
 	s.grind()
 	return s, s.fed()

@@ -11,7 +11,7 @@ func (w *walker) crossing() (diode int, at float64) {
 	for i := range w.diodes {
 		p := w.excess(i)
 		level := math.Max(w.slack[i], p[0]*(1+1e-9)) // a diode that just switched may start beyond its slack
-		if p.below(level) {
+		if _, high := p.hull(); high <= level {
 			continue
 		}
 		if x := p.rise(level); x < at {
@@ -19,6 +19,30 @@ func (w *walker) crossing() (diode int, at float64) {
 		}
 	}
 	return diode, at
+}
+
+// doubtful finds the first place within the trial step at which a diode comes so
+// near to leaving its state that the cubic cannot tell whether it does; one where
+// there is none. A step to there can.
+func (w *walker) doubtful(h float64) float64 {
+	at := 1.0
+	x := w.omega * h
+	margin := 1e-3 * x * x * x * x * w.scale // of the cubic through a sine, twice its largest error
+	for i := range w.diodes {
+		if w.on[i] {
+			continue
+		}
+		p := w.excess(i)
+		if _, high := p.hull(); high <= -margin {
+			continue
+		}
+		for _, t := range p.turns() {
+			if t > 1e-3 && t < math.Min(at, 0.999) && p.at(t) > -margin {
+				at = t
+			}
+		}
+	}
+	return at
 }
 
 // rise is the first place in [0, 1] where a cubic rises through zero on its way
@@ -93,7 +117,14 @@ func (p *cubic) between(low, high, target float64) float64 {
 func (w *walker) locate(h float64) (float64, int) {
 	target, at := w.crossing()
 	if target < 0 {
-		return h, -1
+		if at = w.doubtful(h); at < 1 {
+			h *= at
+			w.try(h)
+			target, at = w.crossing()
+		}
+		if target < 0 {
+			return h, -1
+		}
 	}
 	low, high := 0.0, h
 	least := w.grain

@@ -104,7 +104,7 @@ func (p *Periodic) flow(list []branch) (f Flow, impulse bool) {
 			mean += c * st.length * y[j+1]
 			square += c * st.length * y[j+1] * y[j+1]
 		}
-		peak = math.Max(peak, y.peak(st.euler))
+		peak = y.peak(st.euler, peak)
 	}
 	moved := 0.0
 	for k := range p.track.steps {
@@ -119,16 +119,21 @@ func (p *Periodic) flow(list []branch) (f Flow, impulse bool) {
 	return Flow{quantity.Current(mean / t), quantity.Current(math.Sqrt(square / t)), quantity.Current(peak)}, impulse
 }
 
-// peak is the largest magnitude over a step. Where a diode has just switched the
-// start may be passed over: the stages then ring about the current that follows, of
-// which the end of the step and the next step tell.
-func (y *samples) peak(euler bool) float64 {
-	end := math.Abs(y[3])
-	b := parabola(y[1], y[2], y[3])
-	if euler || math.Abs(y[0]-b[0]) > 0.02*math.Abs(b[0]) {
-		return end
+// peak raises a peak to the largest magnitude over a step. Where a diode has just
+// switched the start may be passed over: the stages then ring about the current that
+// follows, of which the end of the step and the next step tell.
+func (y *samples) peak(euler bool, most float64) float64 {
+	most = math.Max(most, math.Abs(y[3]))
+	if euler {
+		return most
 	}
-	p, most := through(y[0], y[1], y[2], y[3]), end
+	p := through(y[0], y[1], y[2], y[3])
+	if low, high := p.hull(); low >= -most && high <= most {
+		return most
+	}
+	if b := parabola(y[1], y[2], y[3]); math.Abs(y[0]-b[0]) > 0.02*math.Abs(b[0]) {
+		return most
+	}
 	for _, x := range p.turns() {
 		most = math.Max(most, math.Abs(p.at(x)))
 	}

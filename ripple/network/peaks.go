@@ -16,7 +16,9 @@ type peaks struct {
 	factor  []float64
 	pull    []float64 // right-hand side without the diodes
 	y, u, d []float64
-	at      [2]float64 // sine at the peaks
+	soft    []float64 // by diode: on-conductance, no more than needed to tie its ends together
+	early   []int     // entries between potentials at the positive peak
+	shift   float64   // of the prepared equations
 }
 
 func newPeaks(s *system) *peaks {
@@ -35,7 +37,7 @@ func newPeaks(s *system) *peaks {
 	for _, k := range s.inner {
 		g.add(k, n+k)
 	}
-	p := &peaks{walker: newWalker(s), at: [2]float64{1, -1}}
+	p := &peaks{walker: newWalker(s)}
 	p.pattern, p.place = newPattern(g, 2*n)
 	p.base, p.factor = make([]float64, p.pattern.size()), make([]float64, p.pattern.size())
 	p.pull, p.y, p.u, p.d = make([]float64, 2*n), make([]float64, 2*n), make([]float64, 2*n), make([]float64, 2*n)
@@ -43,8 +45,45 @@ func newPeaks(s *system) *peaks {
 	for i := range p.on {
 		p.on[i] = true
 	}
+	p.soften()
+	p.sort()
 	p.assemble()
 	return p
+}
+
+// stiff is how many times the capacitance at its ends a diode may pass in half a
+// period: enough to tie them together, and little enough for its voltage to show
+// through rounding whether it conducts, at any load.
+const stiff = 100
+
+func (p *peaks) soften() {
+	p.soft = make([]float64, len(p.diodes))
+	for i := range p.diodes {
+		d := &p.diodes[i]
+		p.soft[i] = d.on
+		if c := least(p.own, d.a, d.b); c > 0 {
+			p.soft[i] = math.Min(d.on, stiff*c/p.half())
+		}
+	}
+}
+
+// sort finds the entries between potentials at the positive peak.
+func (p *peaks) sort() {
+	early := make([]bool, 2*p.n)
+	for k := range p.n {
+		early[p.place[k]] = true
+	}
+	for k := range 2 * p.n {
+		if !early[k] {
+			continue
+		}
+		p.early = append(p.early, k)
+		for e := p.pattern.start[k]; e < p.pattern.start[k+1]; e++ {
+			if early[p.pattern.row[e]] {
+				p.early = append(p.early, 2*p.n+int(e))
+			}
+		}
+	}
 }
 
 // half is the time between the peaks.
@@ -130,21 +169,30 @@ func (p *peaks) solve() {
 	}
 }
 
+// lean counts diodes that all but conduct as conducting, for the answers: at next to
+// no load rounding alone would decide.
+func (p *peaks) lean() {
+	for i := range p.diodes {
+		for half := range 2 {
+			p.on[2*i+half] = p.over(i, half, p.u) > -1e-8*largest(p.u)
+		}
+	}
+	p.prepare(0)
+}
+
 // newton solves with the diodes as they are.
 func (p *peaks) newton() {
 	h, n := p.half(), p.n
-	copy(p.factor, p.base)
 	copy(p.y, p.pull)
 	for half := range 2 {
 		s := 1 - 2*float64(half)
 		for i := range p.diodes {
 			if d := &p.diodes[i]; p.on[2*i+half] {
-				p.enter(p.factor, &d.span, h*d.on, half)
-				d.inject(p.y[half*n:(half+1)*n], -h*d.on*(d.offset.at(s, s)-d.drop))
+				d.inject(p.y[half*n:(half+1)*n], -h*p.soft[i]*(d.offset.at(s, s)-d.drop))
 			}
 		}
 	}
-	p.pattern.factoriseReal(p.factor)
+	p.prepare(0)
 	for k, v := range p.y {
 		p.d[p.place[k]] = v
 	}
@@ -154,13 +202,32 @@ func (p *peaks) newton() {
 	}
 }
 
+// prepare factorises with the diodes as they are, the first half scaled for answers
+// to (1 + shift − M).
+func (p *peaks) prepare(shift float64) {
+	copy(p.factor, p.base)
+	for half := range 2 {
+		for i := range p.diodes {
+			if d := &p.diodes[i]; p.on[2*i+half] {
+				p.enter(p.factor, &d.span, p.half()*p.soft[i], half)
+			}
+		}
+	}
+	if p.shift = shift; shift != 0 {
+		for _, k := range p.early {
+			p.factor[k] *= 1 + shift
+		}
+	}
+	p.pattern.factoriseReal(p.factor)
+}
+
 // passed is the largest charge a diode passes in a period.
 func (p *peaks) passed() float64 {
 	most := 0.0
 	for i := range p.diodes {
-		d, sum := &p.diodes[i], 0.0
+		sum := 0.0
 		for half := range 2 {
-			sum += p.half() * d.on * math.Max(0, p.over(i, half, p.u))
+			sum += p.half() * p.soft[i] * math.Max(0, p.over(i, half, p.u))
 		}
 		most = math.Max(most, sum)
 	}
@@ -188,7 +255,7 @@ func (p *peaks) search() float64 {
 			for half := range 2 {
 				d := &p.diodes[i]
 				rate := d.difference(p.d[half*p.n : (half+1)*p.n])
-				sum += p.half() * d.on * rate * math.Max(0, p.over(i, half, p.u)+t*rate)
+				sum += p.half() * p.soft[i] * rate * math.Max(0, p.over(i, half, p.u)+t*rate)
 			}
 		}
 		return sum
@@ -216,9 +283,10 @@ func (p *peaks) slope() (start, curve float64) {
 	return start, curve
 }
 
-// answer replaces a change of the state over a period by the correction of the
-// state that this circuit would need: the preconditioner of the shooting method.
-// It is one solution with the factors of the last correction.
+// answer replaces a change r of the charges over a period by the correction that
+// (1 + shift − M) makes of it, M being the map of this circuit between its peaks: the
+// preconditioner of the shooting method. With the change δ of the start,
+// (C + h G) u₁ = δ, (C + h G) u₂ = C u₁ and (1 + shift) δ = C u₂ + r.
 func (p *peaks) answer(r []float64) {
 	n := p.n
 	for k := range p.d {
@@ -233,6 +301,6 @@ func (p *peaks) answer(r []float64) {
 	}
 	p.charge(p.y[:n], p.d[:n])
 	for k := range r {
-		r[k] += p.d[k]
+		r[k] = (r[k] + p.d[k]) / (1 + p.shift)
 	}
 }

@@ -19,8 +19,7 @@ type Periodic struct {
 	Assumptions []string
 
 	track *track
-	amps  []float64
-	on    []bool
+	guess []float64 // voltages of the capacitors that the search started from
 }
 
 // periodic takes the state out of the shooter.
@@ -32,7 +31,7 @@ func (s *shooter) periodic() *Periodic {
 	w.Unknowns, w.States = s.n, s.states()
 	s.pace.track.factors = nil
 	return &Periodic{Circuit: s.c, Frequency: quantity.Frequency(1 / s.period), Work: w, Assumptions: s.assumptions,
-		track: s.pace.track, amps: append([]float64(nil), s.amps...), on: append([]bool(nil), s.on...)}
+		track: s.pace.track, guess: s.guessed()}
 }
 
 // Period is the length of the period.
@@ -59,26 +58,32 @@ func (p *Periodic) spanOf(e *circuit.Element) span {
 	return span{s.at(f.group[e.From]), s.at(f.group[e.To]), f.offset[e.From].plus(f.offset[e.To], -1), -1}
 }
 
-// startFrom takes the capacitor voltages and inductor currents of another periodic
-// state, by the names of the elements.
+// startFrom corrects the guess by as much as the guess for a similar circuit had to
+// be corrected, capacitor by capacitor: that changes little where the drive, a load
+// or a value does.
 func (s *shooter) startFrom(p *Periodic) {
-	known := map[string]float64{}
+	correction := map[string]float64{}
 	t := p.track
 	for i := range t.capacitors {
 		c := &t.capacitors[i]
-		known[t.c.Elements[c.element].Name] = c.volts(t.potentials(0, 3), t.steps[0].sign, t.steps[0].sine[3])
+		reached := c.volts(t.potentials(0, 3), t.steps[0].sign, t.steps[0].sine[3])
+		correction[t.c.Elements[c.element].Name] = reached - p.guess[i]
 	}
-	s.pace.place(s.q, s.amps, s.on)
 	for k := range s.q {
 		s.q[k] = 0
 	}
-	for i := range s.capacitors {
+	for i, v := range s.guessed() {
 		c := &s.capacitors[i]
-		v, ok := known[s.c.Elements[c.element].Name]
-		if !ok {
-			v = c.volts(s.peaks.u[s.n:], -1, -1)
-		}
-		c.inject(s.q, c.value*v)
+		c.inject(s.q, c.value*(v+correction[s.c.Elements[c.element].Name]))
 	}
 	s.pack(s.q, s.amps, s.root, s.x)
+}
+
+// guessed are the voltages of the capacitors at the negative peak of the guess.
+func (s *shooter) guessed() []float64 {
+	v := make([]float64, len(s.capacitors))
+	for i := range v {
+		v[i] = s.capacitors[i].volts(s.peaks.u[s.n:], -1, -1)
+	}
+	return v
 }

@@ -1,8 +1,6 @@
 package network
 
 import (
-	"math"
-
 	"kilovet/hv/circuit"
 	"kilovet/hv/quantity"
 )
@@ -27,7 +25,7 @@ func (p *Periodic) Diode(name string) DiodeFigures {
 		}
 		time += p.track.steps[k].length
 		y := p.current(list, k)
-		peak = math.Max(peak, y.peak(p.track.steps[k].euler))
+		peak = y.peak(p.track.steps[k].euler, peak)
 	}
 	f.Peak = quantity.Current(peak)
 	return DiodeFigures{-p.Across(name).Least, f, quantity.Fraction(time / p.track.period)}

@@ -86,8 +86,8 @@ func parabola(y1, y2, y3 float64) cubic {
 func (p *cubic) at(x float64) float64    { return p[0] + x*(p[1]+x*(p[2]+x*p[3])) }
 func (p *cubic) slope(x float64) float64 { return p[1] + x*(2*p[2]+x*3*p[3]) }
 
-// below reports whether the cubic stays under a level on [0, 1], by its Bézier
-// points, whose hull it does not leave. It may say no where yes is true.
-func (p *cubic) below(level float64) bool {
-	return p[0] <= level && p[0]+p[1]/3 <= level && p[0]+(2*p[1]+p[2])/3 <= level && p[0]+p[1]+p[2]+p[3] <= level
+// hull holds the cubic on [0, 1]: the least and greatest of its Bézier points.
+func (p *cubic) hull() (low, high float64) {
+	b1, b2, b3 := p[0]+p[1]/3, p[0]+(2*p[1]+p[2])/3, p[0]+p[1]+p[2]+p[3]
+	return min(p[0], b1, b2, b3), max(p[0], b1, b2, b3)
 }

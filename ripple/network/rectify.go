@@ -20,7 +20,7 @@ const (
 )
 
 // rectify replaces an on-resistance of next to nothing and a leakage of zero.
-func (s *system) rectify() {
+func (s *system) rectify(leak float64) {
 	local := make([]float64, s.n)
 	for i := range s.capacitors {
 		c := &s.capacitors[i]
@@ -42,7 +42,7 @@ func (s *system) rectify() {
 			d.on, d.replaced, replaced = most, true, true
 		}
 		if d.leak == 0 {
-			d.leak, d.assumed = math.Max(smallestLeak*c/s.period, bareLeak), true
+			d.leak, d.assumed = math.Max(leak*c, bareLeak), true
 		}
 	}
 	if replaced {

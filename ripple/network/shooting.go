@@ -23,13 +23,14 @@ type shooter struct {
 	dq, di, du      []float64
 	lanes           []trio
 	on              []bool
+	reach           float64 // of a correction that is not Newton's
 	work            Work
 }
 
 func newShooter(s *system) *shooter {
 	m := s.states()
 	h := &shooter{system: s, root: s.roots(), solver: newKrylov(m), peaks: newPeaks(s)}
-	h.pace = &pace{walker: newWalker(s), track: &track{system: s}, energy: math.Sqrt(s.typical) * s.scale}
+	h.pace = &pace{walker: newWalker(s), track: &track{system: s}, energy: s.measureOfEnergy()}
 	h.x, h.r, h.step, h.old = make([]float64, m), make([]float64, m), make([]float64, m), make([]float64, m)
 	h.q, h.dq, h.du = make([]float64, s.n), make([]float64, s.n), make([]float64, s.n)
 	h.amps, h.di = make([]float64, len(s.inductors)), make([]float64, len(s.inductors))
@@ -37,10 +38,20 @@ func newShooter(s *system) *shooter {
 	return h
 }
 
+// measureOfEnergy is what the roughness of a step is relative to: the root of twice
+// the energy of a typical capacitor at the drive's peak.
+func (s *system) measureOfEnergy() float64 {
+	if s.typical == 0 {
+		return 1
+	}
+	return math.Sqrt(s.typical) * s.scale
+}
+
 // guess starts from the charges at the negative peak of the drive.
 func (s *shooter) guess() {
 	p := s.peaks
 	p.solve()
+	p.lean()
 	p.charge(p.u[s.n:], s.q)
 	for k := range s.q {
 		s.q[k] += s.capDirect[k] - s.capSquare[k] - s.capSine[k]
@@ -87,24 +98,32 @@ func finite(x []float64) bool {
 // ask for anything; between the peaks every diode has its part.
 const bold = 10
 
-// correct computes Newton's correction of the state into step, or takes that of the
-// circuit between the peaks where Newton's is beyond belief.
+// correct computes Newton's correction of the state into step, or where that is
+// beyond belief takes that of the circuit between the peaks. As long as those
+// change nothing, each is longer than the last.
 func (s *shooter) correct() {
 	copy(s.step, s.r)
 	s.solver.solve(s.step, s.minusPeriod, s.precondition, 1e-3)
 	copy(s.old, s.r)
 	s.precondition(s.old)
-	if n := norm(s.step); !(n <= bold*norm(s.old)) {
-		copy(s.step, s.old)
+	most := bold * s.reach * norm(s.old)
+	if n := norm(s.step); n <= most {
+		s.reach = 1
+		return
 	}
+	copy(s.step, s.old)
+	scaleBy(s.step, s.reach)
+	s.reach *= 4
 }
 
 // minusPeriod replaces a change of the start by what the period leaves of the
 // difference between it and the change of the end.
-func (s *shooter) minusPeriod(x []float64) {
+func (s *shooter) minusPeriod(x []float64) { s.minus(s.pace.track, x) }
+
+func (s *shooter) minus(t *track, x []float64) {
 	s.work.Products++
 	s.unpack(x, s.root, s.dq, s.di)
-	s.pace.track.carry(s.dq, s.di, s.lanes, s.du)
+	t.carry(s.dq, s.di, s.lanes, s.du)
 	copy(s.old, x)
 	s.pack(s.dq, s.di, s.root, x)
 	for i, v := range s.old {
@@ -153,6 +172,7 @@ func (s *shooter) converge(g grade, most int) error {
 func (s *shooter) correctUntil(g grade, most int, done func() bool) error {
 	p := s.pace
 	p.grade, p.smooth = g, false
+	s.reach = 1
 	last := math.Inf(1)
 	for range most {
 		size, err := s.residual(last)
@@ -181,6 +201,7 @@ func (s *shooter) residual(last float64) (float64, error) {
 		if size := norm(s.r); size <= 3*last || back == 12 {
 			return size, nil
 		}
+		s.reach = 1
 		axpy(-0.75, s.step, s.x)
 		scaleBy(s.step, 0.25)
 	}

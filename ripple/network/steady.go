@@ -35,7 +35,7 @@ func Steady(c *circuit.Circuit, o Options) (*Periodic, error) {
 	if frequency == 0 {
 		frequency = Drive(c)
 	}
-	s, err := newSystem(c, float64(frequency))
+	s, err := newSystem(c, float64(frequency), smallestLeak*float64(frequency))
 	if err != nil {
 		return nil, err
 	}

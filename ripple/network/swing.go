@@ -52,8 +52,7 @@ func (p *Periodic) swing(s *span) Swing {
 		for j, c := range share {
 			sum += c * p.track.steps[k].length * y[j+1]
 		}
-		low, high := y.extremes(p.track.steps[k].euler)
-		w.Least, w.Greatest = min(w.Least, quantity.Voltage(low)), max(w.Greatest, quantity.Voltage(high))
+		w.Least, w.Greatest = y.widen(p.track.steps[k].euler, w.Least, w.Greatest)
 	}
 	w.Mean = quantity.Voltage(sum / p.track.period)
 	return w
@@ -81,15 +80,18 @@ func (y *samples) polynomial(euler bool) cubic {
 	return through(y[0], y[1], y[2], y[3])
 }
 
-// extremes is the least and greatest value over the step.
-func (y *samples) extremes(euler bool) (low, high float64) {
+// widen widens a range to what the quantity does over the step.
+func (y *samples) widen(euler bool, least, greatest quantity.Voltage) (quantity.Voltage, quantity.Voltage) {
 	p := y.polynomial(euler)
-	low, high = math.Inf(1), math.Inf(-1)
+	if low, high := p.hull(); low >= float64(least) && high <= float64(greatest) {
+		return least, greatest
+	}
+	low, high := p[0], p[0]
 	for _, x := range p.turns() {
 		v := p.at(x)
-		low, high = math.Min(low, v), math.Max(high, v)
+		low, high = min(low, v), max(high, v)
 	}
-	return math.Min(low, p[0]), math.Max(high, p[0])
+	return min(least, quantity.Voltage(low)), max(greatest, quantity.Voltage(high))
 }
 
 // Point is a voltage at an instant of the period.

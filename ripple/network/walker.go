@@ -238,7 +238,11 @@ func (w *walker) excess(i int) cubic {
 // tolerate sets the excess of the diodes that does not count: what makes a part of
 // 1e-4 of the mean current, or what the arithmetic leaves.
 func (w *walker) tolerate(current float64) {
+	least := 1e-12 * w.scale
+	if w.grain > finest*w.period {
+		least = 1e-10 * w.scale
+	}
 	for i := range w.diodes {
-		w.slack[i] = math.Max(1e-4*current/w.diodes[i].on, 1e-10*w.scale)
+		w.slack[i] = math.Max(1e-4*current/w.diodes[i].on, least)
 	}
 }

@@ -1,0 +1,126 @@
+package network
+
+import "math"
+
+// envelope follows the state from period to period in leaps of many periods. With
+// g(x) the change of the state over the period that starts at x, it takes the
+// two-stage Rosenbrock step
+//
+//	(1 + γH(1 − M)) k₁ = g(x),  (1 + γH(1 − M)) k₂ = g(x + H k₁) − 2 k₁,
+//	x(H) = x + (1 + w) H k₁ + w H k₂
+//
+// (Hairer and Wanner II, IV.7, with M the map of small changes over the period),
+// whose parameters are chosen for periods instead of a continuous time: a mode that
+// falls to m in a period has to come out as m^H to second order in 1 − m, and
+// vanish where m is zero: γ = 1 − √((1 + 1/H)/2), w = γ(1 − γ)/(1 − 2γ). A leap of
+// one period is the period itself.
+type envelope struct {
+	*shooter
+	periods float64   // since the start
+	leap    float64   // the next, in periods
+	from    []float64 // the state before the leap
+	start   []float64 // its change over a period
+	k1, k2  []float64
+	linear  *track // of the period at the start of the leap
+	spare   *track
+	ahead   float64 // γH of the equations in hand
+}
+
+func newEnvelope(s *shooter) *envelope {
+	m := len(s.x)
+	return &envelope{shooter: s, leap: 1, from: make([]float64, m), start: make([]float64, m),
+		k1: make([]float64, m), k2: make([]float64, m), linear: s.pace.track, spare: &track{system: s.system}}
+}
+
+// deviation is the part of the state that a leap may be wrong by.
+const deviation = 2e-3
+
+// here walks the period at the present state, in the fine grade.
+func (e *envelope) here() error {
+	e.pace.grade, e.pace.track = fine, e.linear
+	if err := e.walk(); err != nil {
+		return err
+	}
+	copy(e.from, e.x)
+	copy(e.start, e.r)
+	e.pace.grade, e.pace.track = rough, e.spare
+	return nil
+}
+
+// advance leaps on from the period walked last, by at most a number of periods. It
+// shortens the leap until the two orders of the method agree well enough.
+func (e *envelope) advance(most float64) error {
+	e.leap = math.Max(1, math.Min(math.Floor(e.leap), most))
+	for {
+		wrong, err := e.try()
+		if err != nil {
+			return err
+		}
+		limit := deviation * (norm(e.x) + e.pace.energy)
+		more := 0.8 * math.Sqrt(limit/(wrong+1e-30))
+		if wrong <= limit {
+			e.periods += e.leap
+			if e.leap > 1 {
+				if err := e.relax(); err != nil {
+					return err
+				}
+			}
+			e.leap *= math.Max(0.5, math.Min(3, more))
+			return nil
+		}
+		e.leap = math.Max(1, math.Floor(e.leap*math.Max(0.2, more)))
+	}
+}
+
+// relax walks a single period after a leap, which leaves the swift modes less exact
+// than the envelope: they decide the currents.
+func (e *envelope) relax() error {
+	if err := e.walk(); err != nil {
+		return err
+	}
+	axpy(1, e.r, e.x)
+	e.periods++
+	return nil
+}
+
+// try takes the leap from the state before it and returns how far the first order
+// of the method is from the second.
+func (e *envelope) try() (float64, error) {
+	h := e.leap
+	copy(e.x, e.from)
+	if h == 1 {
+		axpy(1, e.start, e.x)
+		return 0, nil
+	}
+	gamma := 1 - math.Sqrt((1+1/h)/2)
+	w := gamma * (1 - gamma) / (1 - 2*gamma)
+	e.ahead = gamma * h
+	e.peaks.prepare(1 / e.ahead)
+	copy(e.k1, e.start)
+	e.resolve(e.k1)
+	axpy(h, e.k1, e.x)
+	if err := e.walk(); err != nil {
+		return 0, err
+	}
+	copy(e.k2, e.r)
+	axpy(-2, e.k1, e.k2)
+	e.resolve(e.k2)
+	copy(e.x, e.from)
+	axpy((1+w)*h, e.k1, e.x)
+	axpy(w*h, e.k2, e.x)
+	axpy(1, e.k1, e.k2)
+	return w * h * norm(e.k2), nil
+}
+
+// resolve solves (1 + γH(1 − M)) x = b in place.
+func (e *envelope) resolve(b []float64) {
+	e.solver.solve(b, func(x []float64) {
+		copy(e.step, x)
+		e.minus(e.linear, x)
+		scaleBy(x, e.ahead)
+		axpy(1, e.step, x)
+	}, func(x []float64) {
+		e.precondition(x)
+		scaleBy(x, 1/e.ahead)
+	}, 1e-3)
+}

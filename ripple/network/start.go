@@ -1,0 +1,177 @@
+package network
+
+import (
+	"math"
+
+	"kilovet/hv/circuit"
+	"kilovet/hv/lack"
+	"kilovet/hv/quantity"
+)
+
+// StartOptions say how a circuit starts; the zero value of Ramp is full drive at once.
+type StartOptions struct {
+	Node  circuit.Node      // that has to come up
+	Share quantity.Fraction // of its final mean; zero is 95 %
+	Ramp  quantity.Time     // over which the drive rises in proportion to time
+}
+
+// Startup is the start of a circuit from all capacitors discharged, the drive from
+// phase zero.
+type Startup struct {
+	// Reached is the first instant at which the potential of the node itself, not its
+	// mean, has the share of its final mean.
+	Reached quantity.Time
+	// Stresses are those between the start and the end of the period in which that
+	// happens; of the periods passed over in leaps, only some are looked at.
+	Stresses
+	Work Work
+}
+
+// Start follows a circuit from nothing until a node has come up, given the periodic
+// state it goes to. Single periods are walked at first and at the end; between,
+// leaps of many periods follow the envelope to 0.2 % each. A ramp is a staircase of
+// at most a hundred steps. It is a lack where the node does not come up, or takes
+// more than 400 leaps.
+func Start(p *Periodic, o StartOptions) (*Startup, error) {
+	if o.Share == 0 {
+		o.Share = 0.95
+	}
+	final, err := p.At(o.Node)
+	if err != nil {
+		return nil, err
+	}
+	r := &rise{options: o, periodic: p, level: math.Abs(float64(final.Mean) * float64(o.Share)), sign: math.Copysign(1, float64(final.Mean)), reached: math.Inf(1)}
+	if err := r.run(); err != nil {
+		return nil, err
+	}
+	r.out.Stresses = r.ledger.Stresses
+	return &r.out, nil
+}
+
+// rise is a start under way.
+type rise struct {
+	options  StartOptions
+	periodic *Periodic
+	level    float64
+	sign     float64
+	ledger   *ledger
+	x        []float64
+	periods  float64
+	reached  float64 // within the period last walked
+	out      Startup
+}
+
+func (r *rise) run() error {
+	stairs := r.stairs()
+	for k := range stairs {
+		until := math.Ceil(float64(r.options.Ramp) * float64(r.periodic.Frequency) * float64(k+1) / float64(stairs))
+		e, err := r.stair((float64(k) + 0.5) / float64(stairs))
+		if err != nil {
+			return err
+		}
+		if done, err := r.climb(e, until); done || err != nil {
+			return err
+		}
+	}
+	e, err := r.stair(1)
+	if err != nil {
+		return err
+	}
+	_, err = r.climb(e, math.Inf(1))
+	return err
+}
+
+// stairs is the number of steps of the ramp.
+func (r *rise) stairs() int {
+	return int(math.Min(100, math.Ceil(float64(r.options.Ramp)*float64(r.periodic.Frequency))))
+}
+
+// stair sets up the circuit at a part of the drive.
+func (r *rise) stair(part float64) (*envelope, error) {
+	c := r.periodic.Circuit
+	f := float64(r.periodic.Frequency)
+	if part < 1 {
+		c = c.Each(func(e *circuit.Element) bool {
+			if o := wave(e, f); e.Kind == circuit.Source && e.Wave.Form != circuit.Direct && o.size() > 0 {
+				e.Wave.Amplitude *= quantity.Voltage(part)
+			}
+			return true
+		})
+	}
+	s, err := newSystem(c, f, smallestLeak*f)
+	if err != nil {
+		return nil, err
+	}
+	h := newShooter(s)
+	h.guess()
+	passed := math.Max(h.pace.passed, 0.1*s.typical*s.scale)
+	if r.x != nil {
+		copy(h.x, r.x)
+	} else {
+		for i := range h.x {
+			h.x[i] = 0
+		}
+		r.ledger = newLedger(s)
+	}
+	h.judge(passed)
+	return newEnvelope(h), nil
+}
+
+// look walks the period at the present state and reports whether the node comes up
+// in it.
+func (r *rise) look(e *envelope) (bool, error) {
+	if err := e.here(); err != nil {
+		return false, err
+	}
+	s, node := e.frame, r.options.Node
+	way := span{e.at(s.group[node]), grounded, s.offset[node], -1}
+	r.reached = e.linear.reaches(&way, r.sign, r.level)
+	passed := e.linear.passed()
+	e.judge(math.Max(math.Min(e.pace.passed, passed), 0.01*passed))
+	return !math.IsInf(r.reached, 1), nil
+}
+
+// climb goes on on one stair until the node has come up or the stair ends. Where a
+// leap went past the instant it goes back and takes shorter ones, until a single
+// period holds it.
+func (r *rise) climb(e *envelope, until float64) (done bool, err error) {
+	defer func() {
+		r.x, r.periods = e.x, e.periods
+		r.out.Work.add(e.pace.work)
+		r.out.Work.Products += e.work.Products
+	}()
+	e.periods = r.periods
+	before, at, beyond := append([]float64(nil), e.x...), e.periods, math.Inf(1)
+	for range 400 {
+		if e.periods >= until {
+			return false, nil
+		}
+		leapt := e.periods-at > 1
+		up, err := r.look(e)
+		if err != nil {
+			return false, err
+		}
+		if !up || !leapt {
+			r.ledger.enter(e.linear)
+		}
+		if up && !leapt {
+			r.out.Reached = quantity.Time(e.periods*e.period + r.reached)
+			return true, nil
+		}
+		if up {
+			beyond = e.periods
+			copy(e.x, before)
+			e.periods = at
+			if err := e.here(); err != nil {
+				return false, err
+			}
+		}
+		copy(before, e.x)
+		at = e.periods
+		most := math.Min(until-at, math.Max(1, math.Floor((beyond-at)/2)))
+		if err := e.advance(most); err != nil {
+			return false, err
+		}
+	}
+	return false, lack.Failed("the start took more than 400 leaps")
+}

@@ -48,7 +48,7 @@ emission = "60 uA"
 
 // examples are the ladders of the benchmarks and the work bounds.
 func examples() map[string]string {
-	six := ladder{stages: 6, frequency: 38e3, peak: 1750, resistance: 900, capacitance: 2.2e-9, drop: 12, on: 40, junction: 1e-12, leakage: "10 nA", more: column}
+	six := ladder{stages: 6, polarity: "negative", frequency: 38e3, peak: 1750, resistance: 900, capacitance: 2.2e-9, drop: 12, on: 40, junction: 1e-12, leakage: "10 nA", more: column}
 	e := map[string]string{"6 stages with filter and bias": six.describe()}
 	for _, n := range []int{12, 30, 60} {
 		l := ladder{stages: n, frequency: 50e3, peak: 1000, resistance: 100, capacitance: 1e-9, current: 1e-6, drop: 8, on: 50, junction: 1e-12, leakage: "1 nA"}

@@ -12,6 +12,7 @@ import (
 type ladder struct {
 	stages               int
 	topology, drive      string
+	polarity             string
 	frequency, peak      float64
 	resistance, inductor float64
 	capacitance, current float64
@@ -29,8 +30,11 @@ func (l ladder) describe() string {
 	if l.leakage == "" {
 		l.leakage = "0 A"
 	}
+	if l.polarity == "" {
+		l.polarity = "positive"
+	}
 	text := fmt.Sprintf("format = 1\n[drive]\nwaveform = %q\nfrequency = \"%g Hz\"\npeak = \"%g V\"\nresistance = \"%g ohm\"\ninductance = \"%g H\"\n", l.drive, l.frequency, l.peak, l.resistance, l.inductor)
-	text += fmt.Sprintf("[multiplier]\ntopology = %q\npolarity = \"positive\"\nstages = %d\ncoupling_capacitor = { value = \"%g F\" }\nsmoothing_capacitor = { value = \"%g F\" }\n", l.topology, l.stages, l.capacitance, l.capacitance)
+	text += fmt.Sprintf("[multiplier]\ntopology = %q\npolarity = %q\nstages = %d\ncoupling_capacitor = { value = \"%g F\" }\nsmoothing_capacitor = { value = \"%g F\" }\n", l.topology, l.polarity, l.stages, l.capacitance, l.capacitance)
 	text += fmt.Sprintf("diode = { forward_drop = \"%g V\", resistance = \"%g ohm\", capacitance = \"%g F\", leakage = %q, rated_voltage = \"1 kV\" }\npickup_to_output = \"0 F\"\n", l.drop, l.on, l.junction, l.leakage)
 	if l.current > 0 {
 		text += fmt.Sprintf("[[load]]\nname = \"load\"\nat = \"multiplier\"\ncurrent = \"%g A\"\n", l.current)

@@ -48,6 +48,7 @@ func newLedger(s *system) *ledger {
 	l := &ledger{Stresses: Stresses{s.c, make([]Stress, n)}, view: &Periodic{Circuit: s.c, track: &track{system: s}},
 		branches: make([][]branch, n), spans: make([]span, n), last: make([]float64, n)}
 	for i := range s.c.Elements {
+		l.of[i].Least, l.of[i].Greatest = quantity.Voltage(math.Inf(1)), quantity.Voltage(math.Inf(-1))
 		l.branches[i] = l.view.branches(i, true)
 		l.spans[i] = l.view.spanOf(&s.c.Elements[i])
 	}

@@ -95,8 +95,14 @@ func (s Segment) Part(from, to float64) Segment {
 
 // Reversed is the same path walked from its end.
 func (s Segment) Reversed() Segment {
-	turned := map[Turn]Turn{Straight: Straight, Left: Right, Right: Left}
-	return Segment{From: s.To, To: s.From, Centre: s.Centre, Turn: turned[s.Turn]}
+	s.From, s.To = s.To, s.From
+	switch s.Turn {
+	case Left:
+		s.Turn = Right
+	case Right:
+		s.Turn = Left
+	}
+	return s
 }
 
 // Closest is the fraction of the length at which the segment comes closest to a

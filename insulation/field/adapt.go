@@ -24,12 +24,22 @@ const (
 	// faint is the field, relative to the strongest away from sharp edges, below
 	// which it need not be resolved on its own.
 	faint = 1e-3
+	// nearSharp is the distance from a sharp edge, in units of the model, below which
+	// a field does not count as a peak; and 1/wide the length of a panel from which it
+	// counts in full for what is strong in the figure.
+	nearSharp = 0.01
+	wide      = 10
+	// noise is the error of potentials, relative to one volt, that the quadrature and
+	// panels elsewhere leave: on a short panel it looks like a field.
+	noise = 2e-8
 	// peakChange is what the last refinement may change of an electrode's peak.
 	peakChange = 5e-4
 	// mostCuts bounds the cuts of one panel in one round.
 	mostCuts = 12
 	// mostExcess bounds what a first, poor solution may ask for towards a kink.
 	mostExcess = 50
+	// reached is how many times the length of the last panel its error is felt.
+	reached = 64
 	// smooths is what halving takes off the excess on a smooth wall, at least.
 	smooths = 30
 )
@@ -48,9 +58,12 @@ func (s *solver) adapt() (coarse, fine *solved, err error) {
 		wants := s.wants(fine)
 		now = s.peaks(fine)
 		limit := 1.0
-		if largest := most(wants); largest <= 1 {
+		switch largest := most(wants); {
+		case largest == 0: // nothing to resolve, as in a uniform field
+			return fine, fine, fine.checkBounds()
+		case largest <= 1:
 			if coarse != nil && settled(before, now) {
-				return coarse, fine, nil
+				return coarse, fine, fine.checkBounds()
 			}
 			limit = few(wants) // one refinement more, to see what it changes
 		}
@@ -76,12 +89,10 @@ func (s *solver) peaks(v *solved) (list []float64) {
 		peaks, strongest := make([]float64, len(s.names)), 0.0
 		for i := range v.sides {
 			k := s.walls[v.sides[i].wall].electrode
-			if k < 0 || s.atSharp(v.sides[i].panel) {
+			if k < 0 {
 				continue
 			}
-			for j := range s.fineRule {
-				peaks[k] = math.Max(peaks[k], math.Abs(s.fineRule[j].basis.dot(&v.q[g][i])))
-			}
+			peaks[k] = math.Max(peaks[k], s.peak(v.sides[i].panel, &v.q[g][i]))
 			strongest = math.Max(strongest, peaks[k])
 		}
 		for k := range peaks {
@@ -92,6 +103,17 @@ func (s *solver) peaks(v *solved) (list []float64) {
 		list = append(list, peaks...)
 	}
 	return list
+}
+
+// peak on a panel away from sharp edges.
+func (s *solver) peak(p *panel, q *nodal) (most float64) {
+	const points = 24
+	from, to := s.away(p, nearSharp)
+	for i := 0; i <= points && from < to; i++ {
+		b := s.basis(from + (to-from)*float64(i)/points)
+		most = math.Max(most, math.Abs(b.dot(q)))
+	}
+	return most
 }
 
 // want says how much more than allowed the last terms of q and du/ds hold of the
@@ -171,8 +193,9 @@ func (s *solver) wants(v *solved) map[*panel]want {
 				continue
 			}
 			w := s.tail(sd, &v.u[g][i], &v.q[g][i])
+			w.excess = math.Max(0, w.excess-noise/sd.panel.h)
 			w.excess /= math.Max(s.measure(sd, at[i], &v.q[g][i]), faint*strongest) * s.allowed(sd, at[i], peaks)
-			if w.excess > wants[sd.panel].excess {
+			if before, known := wants[sd.panel]; !known || w.excess > before.excess {
 				wants[sd.panel] = w
 			}
 		}
@@ -194,15 +217,16 @@ func (s *solver) tail(sd *side, u, q *nodal) want {
 	return w
 }
 
-// strengths are the largest field at the nodes of every side, and away from sharp
-// edges on every electrode and anywhere.
+// strengths are the largest field at the nodes of every side; away from sharp edges
+// that on every electrode; and a measure of what is strong in the figure, in which
+// short panels count less: near a sharp edge the field rises with their shortness.
 func (s *solver) strengths(v *solved, g int) (at []float64, peaks map[int]float64, strongest float64) {
 	at, peaks, strongest = make([]float64, len(v.sides)), map[int]float64{}, 0.0
 	for i := range v.sides {
 		sd := &v.sides[i]
 		at[i] = s.strongest(sd, &v.u[g][i], &v.q[g][i])
 		if k := s.walls[sd.wall].electrode; !s.atSharp(sd.panel) {
-			strongest = math.Max(strongest, at[i])
+			strongest = math.Max(strongest, at[i]*math.Sqrt(math.Min(1, wide*sd.panel.h)))
 			peaks[k] = math.Max(peaks[k], at[i])
 		}
 	}
@@ -245,11 +269,11 @@ func (s *solver) strongest(sd *side, u, q *nodal) (most float64) {
 	return most
 }
 
-// atSharp reports whether a panel ends at a sharp edge.
+// atSharp reports whether a panel lies near a sharp edge.
 func (s *solver) atSharp(p *panel) bool {
-	left, right := s.grades(p)
 	w := &s.walls[p.wall]
-	return left && w.ends[0].sharp || right && w.ends[1].sharp
+	near := func(e end, distance float64) bool { return (e.sharp || e.beside) && distance < nearSharp }
+	return near(w.ends[0], p.start) || near(w.ends[1], w.curve.length-p.start-p.h)
 }
 
 // atKink reports whether a panel ends where the curvature jumps.
@@ -260,13 +284,16 @@ func (s *solver) atKink(p *panel) bool {
 }
 
 // finest reports whether a panel lies so near an irregular end that nothing is
-// gained by cutting it: the last panel of grading, and the one beside it, which
-// shows what the last cannot hold.
+// gained by cutting it: the last panel of grading, the one beside it, which shows
+// what the last cannot hold, and those farther off that are shorter than grading
+// makes them.
 func (s *solver) finest(p *panel) bool {
 	w := &s.walls[p.wall]
 	for k, before := range []float64{p.start, w.curve.length - p.start - p.h} {
 		floor := floorOf(w.ends[k])
-		if w.ends[k].graded() && before <= floor && (p.h <= floor || before > 1e-9*p.h) {
+		last := before <= 1e-9*p.h && p.h <= floor
+		beside := before > 1e-9*p.h && (before <= floor || before <= reached*floor && p.h <= before)
+		if w.ends[k].graded() && (last || beside) {
 			return true
 		}
 	}

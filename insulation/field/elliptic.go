@@ -21,7 +21,7 @@ func ringIntegrals(r, s, dr, dz float64) (i, j, h float64) {
 	a, b := (1+kc)/2, math.Sqrt(kc)
 	c := m / (4 * a) // c₁ = (1 − k')/2
 	t, weight := c*c, 1.0
-	for c > 1e-8*a { // c₁² + 2 c₂² + 4 c₃² …
+	for c > 1e-8*a && weight < 1e6 { // c₁² + 2 c₂² + 4 c₃² …; without end only at δ = 0
 		next := (a + b) / 2
 		b = math.Sqrt(a * b)
 		a = next

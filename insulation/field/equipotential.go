@@ -188,7 +188,10 @@ func (f *Field) contour(s seed, level float64) ([]complex128, error) {
 // half follows one way, pulling every point back to the level.
 func (f *Field) half(s seed, level float64, sense complex128) (path []complex128, closed bool, err error) {
 	t := &tracer{Field: f, region: s.region, along: sense, tolerance: 3e-3}
-	t.longest = func(x, _ complex128) float64 { return t.chord(x) }
+	var last chord
+	t.longest = func(x, g complex128) float64 {
+		return last.longest(x, g*sense/complex(cmplx.Abs(g), 0))
+	}
 	t.put = func(x complex128, u float64, g complex128) complex128 {
 		if size := real(g * cmplx.Conj(g)); size > 0 {
 			x -= g * complex((u-level)/size, 0)
@@ -210,10 +213,16 @@ func (f *Field) half(s seed, level float64, sense complex128) (path []complex128
 	return path, closed, err
 }
 
-// chord is a step over which the line does not turn too far for a picture.
-func (t *tracer) chord(x complex128) float64 {
-	d, _, _ := t.direction(x)
-	ahead, _, _ := t.direction(x + d*complex(longestChord/10, 0))
-	turn := math.Abs(cmplx.Phase(ahead / d))
-	return math.Min(longestChord, widestTurn*longestChord/10/math.Max(turn, 1e-9))
+// chord is a step over which the line, bent as it was over the last one, does not
+// turn too far for a picture.
+type chord struct{ x, d complex128 }
+
+func (c *chord) longest(x, d complex128) float64 {
+	way := apart(x, c.x)
+	turn := 0.0
+	if c.d != 0 && way > 0 {
+		turn = math.Abs(cmplx.Phase(d/c.d)) / way
+	}
+	*c = chord{x, d}
+	return math.Min(longestChord, widestTurn/math.Max(turn, 1e-9))
 }

@@ -145,32 +145,6 @@ func compareTurn(a, b float64) int {
 	return 0
 }
 
-// markKink marks where the curvature jumps between two walls that go on smoothly,
-// by more than a tenth of the inverse of the shorter: the field has a kink there.
-func (m *model) markKink(spokes []spoke) {
-	for i, a := range spokes {
-		for _, b := range spokes[:i] {
-			if a.wall < 0 || b.wall < 0 || a.wall == b.wall || a.block != b.block {
-				continue
-			}
-			opposite := math.Abs(math.Remainder(a.heading-b.heading+math.Pi, 2*math.Pi)) < 0.01
-			ca, cb := &m.walls[a.wall].curve, &m.walls[b.wall].curve
-			jump := math.Abs(a.bending(ca)+b.bending(cb)) * math.Min(ca.length, cb.length)
-			if opposite && jump > 0.1 {
-				m.walls[a.wall].ends[a.end].kink, m.walls[b.wall].ends[b.end].kink = true, true
-			}
-		}
-	}
-}
-
-// bending of a curve as it leaves the node.
-func (s spoke) bending(c *curve) float64 {
-	if s.end == 1 {
-		return -c.bending
-	}
-	return c.bending
-}
-
 // lookAround splits the surroundings of a node into wedges and looks at each.
 func (m *model) lookAround(node int, spokes []spoke) {
 	if len(spokes) == 0 {
@@ -217,68 +191,6 @@ func (m *model) lookInto(node int, spokes []spoke, last spoke, start barrier) {
 	m.record(j, w.exponents())
 }
 
-// lookOnAxis does the same for a node on the axis: spokes to the right of it, by
-// their polar angle.
-func (m *model) lookOnAxis(node int, spokes []spoke) {
-	above, regions := m.besideAxis(spokes)
-	c := cone{wedge: wedge{start: open}}
-	j := junction{node: node}
-	theta, in := 0.0, above
-	step := func(s spoke, angle float64) {
-		if in >= 0 {
-			c.sectors = append(c.sectors, sector{angle - theta, math.Max(m.regions[in].constant, leastConstant)})
-			j.regions = append(j.regions, in)
-		}
-	}
-	flush := func(end barrier) {
-		if len(c.sectors) > 0 {
-			c.end = end
-			m.record(j, c.exponents())
-		}
-		c, j = cone{wedge: wedge{start: end}, from: theta}, junction{node: node, metal: end == atConductor}
-	}
-	for i := len(regions) - 1; i >= 0; i-- { // clockwise: from the upper axis down
-		s := regions[i]
-		angle := math.Pi/2 - s.heading
-		step(s, angle)
-		if in >= 0 && s.wall >= 0 {
-			j.rays = append(j.rays, s.ray(in, true))
-			j.metal = j.metal || s.block == atConductor
-		}
-		theta = angle
-		if s.block != open {
-			flush(s.block)
-		}
-		in = m.before(s, spokes, spokes[len(spokes)-1])
-		if in >= 0 && s.wall >= 0 {
-			j.rays = append(j.rays, s.ray(in, false))
-		}
-	}
-	step(spoke{}, math.Pi)
-	flush(open)
-}
-
-// besideAxis lists the spokes right of the axis, counter-clockwise, and the region
-// right of the upper axis.
-func (m *model) besideAxis(spokes []spoke) (above int, right []spoke) {
-	above = -1
-	for _, s := range spokes {
-		if math.Abs(s.heading) < math.Pi/2-1e-6 {
-			right = append(right, s)
-		}
-	}
-	slices.SortFunc(right, func(a, b spoke) int {
-		if a.heading < b.heading {
-			return -1
-		}
-		return 1
-	})
-	if len(right) > 0 {
-		above = right[len(right)-1].beyond
-	}
-	return above, right
-}
-
 // record keeps a junction where the field is not smooth, and tells the walls.
 func (m *model) record(j junction, exponents []float64) {
 	irregular, least := false, highest
@@ -296,18 +208,31 @@ func (m *model) record(j junction, exponents []float64) {
 	if least < 1-almost || j.metal && len(materials) > 1 {
 		m.junctions = append(m.junctions, j)
 	}
-	if !irregular {
-		return
-	}
 	for _, r := range j.rays {
-		if r.wall < 0 {
-			continue
+		if r.wall >= 0 && least < 1-almost {
+			m.walls[r.wall].ends[r.end].sharp = true
 		}
-		e := &m.walls[r.wall].ends[r.end]
-		if !e.irregular || least < e.slowest {
-			e.slowest = least
+	}
+	if irregular {
+		m.gradeAround(j.node, least)
+	}
+}
+
+// gradeAround has the panels of all walls at a node graded towards it, for all feel
+// what the panels beside cannot hold.
+func (m *model) gradeAround(node int, exponent float64) {
+	for i := range m.walls {
+		w := &m.walls[i]
+		edge := &m.plane.Edges[w.edge]
+		for k, n := range []int{edge.Start, edge.End} {
+			if n != node {
+				continue
+			}
+			if e := &w.ends[k]; !e.irregular || exponent < e.slowest {
+				e.irregular, e.slowest = true, exponent
+			}
+			w.ends[k].beside = w.ends[k].beside || exponent < 1-almost
 		}
-		e.irregular, e.sharp = true, e.sharp || least < 1-almost
 	}
 }
 

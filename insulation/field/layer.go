@@ -1,6 +1,9 @@
 package field
 
-import "math/cmplx"
+import (
+	"math"
+	"math/cmplx"
+)
 
 // block holds what a panel does to the nodes of another: row i, column j is the
 // potential at node i of the polynomial of node j, as a charge and as a double
@@ -50,7 +53,12 @@ func (l *layer) row(x complex128, p *panel, factor float64, single, double *noda
 		}
 		return
 	}
-	l.part(x, p, -1, 1, func(y, along complex128, weight float64, t float64) {
+	l.spread(x, p, -1, 1, factor, single, double)
+}
+
+// spread adds the potentials at x of the polynomials on a part of a panel close by.
+func (l *layer) spread(x complex128, p *panel, from, to, factor float64, single, double *nodal) {
+	l.part(x, p, from, to, func(y, along complex128, weight float64, t float64) {
 		s, d := ringPotential(real(x), real(y), x-y, along*1i)
 		b := l.basis(t)
 		for j := range order {
@@ -62,33 +70,58 @@ func (l *layer) row(x complex128, p *panel, factor float64, single, double *noda
 
 // own is the row of a node on its own panel.
 func (l *layer) own(i int, p *panel, single, double *nodal) {
+	if real(p.x[i]) < p.h/2 {
+		l.ownNearAxis(i, p, single, double)
+		return
+	}
 	for k := range l.self[i] {
-		q := &l.self[i][k]
-		d, along := p.curve.step(p.start+p.h*(1+l.nodes[i])/2, q.t*p.h/2)
-		s, m := ringPotential(real(p.x[i]), real(p.x[i])+real(d), -d, along*1i)
-		w := q.weight * p.h / 2
-		for j := range order {
-			single[j] += s * w * q.basis[j]
-			double[j] += m * w * q.basis[j]
+		r := &l.self[i][k]
+		l.ownPoint(i, p, r.t, r.weight, &r.basis, single, double)
+	}
+}
+
+// ownPoint adds a quadrature point at a distance off in t from a node.
+func (l *layer) ownPoint(i int, p *panel, off, weight float64, basis, single, double *nodal) {
+	d, along := p.curve.step(p.start+p.h*(1+l.nodes[i])/2, off*p.h/2)
+	s, m := ringPotential(real(p.x[i]), real(p.x[i])+real(d), -d, along*1i)
+	w := weight * p.h / 2
+	for j := range order {
+		single[j] += s * w * basis[j]
+		double[j] += m * w * basis[j]
+	}
+}
+
+// ownNearAxis does the same where the panel comes near its own image beyond the
+// axis: the rule for the logarithm serves only as far as half the radius goes.
+func (l *layer) ownNearAxis(i int, p *panel, single, double *nodal) {
+	t := l.nodes[i]
+	reach := real(p.x[i]) / p.h
+	for _, end := range []float64{-1, 1} {
+		near := end * math.Min(reach, math.Abs(end-t))
+		for k := range l.log {
+			r := &l.log[k]
+			basis := l.basis(t + near*r.t)
+			l.ownPoint(i, p, near*r.t, math.Abs(near)*r.weight, &basis, single, double)
+		}
+		low, high := math.Min(t+near, end), math.Max(t+near, end)
+		if high > low {
+			l.spread(p.x[i], p, low, high, 1, single, double)
 		}
 	}
 }
 
-// deepest halving: parts of 1e-12 of a panel.
-const deepest = 40
+// leastPart is the length of a part of a panel, in units of the model, that is not
+// halved further: rounding of coordinates.
+const leastPart = 1e-14
 
 // part visits quadrature points on a … b of a panel for an integrand that is
 // nearly singular at x: halves until every piece is its own length away.
 func (l *layer) part(x complex128, p *panel, a, b float64, visit func(y, along complex128, weight, t float64)) {
-	l.pieces(x, p, a, b, deepest, visit)
-}
-
-func (l *layer) pieces(x complex128, p *panel, a, b float64, depth int, visit func(y, along complex128, weight, t float64)) {
 	middle, half := (a+b)/2, (b-a)/2
 	m, _ := p.at(middle)
-	if depth > 0 && cmplx.Abs(x-m) < p.h*half {
-		l.pieces(x, p, a, middle, depth-1, visit)
-		l.pieces(x, p, middle, b, depth-1, visit)
+	if cmplx.Abs(x-m) < p.h*half && p.h*half > leastPart {
+		l.part(x, p, a, middle, visit)
+		l.part(x, p, middle, b, visit)
 		return
 	}
 	for k, g := range l.gauss {

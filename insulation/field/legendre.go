@@ -2,6 +2,7 @@ package field
 
 import (
 	"math"
+	"slices"
 
 	"gonum.org/v1/gonum/integrate/quad"
 )
@@ -30,6 +31,7 @@ type quadrature struct {
 	slope          [order]nodal // from nodal values to those of the derivative by t
 	fineRule       rule         // many even points with both ends, to look at a polynomial
 	self           [order]rule  // for an integrand with a logarithm at a node
+	log            rule         // for a logarithm at 0, on 0 … 1
 	gauss, gaussW  []float64    // for parts of a panel
 }
 
@@ -43,6 +45,7 @@ const (
 func newQuadrature() *quadrature {
 	q := &quadrature{gauss: make([]float64, partPoints), gaussW: make([]float64, partPoints)}
 	quad.Legendre{}.FixedLocations(q.nodes[:], q.weights[:], -1, 1)
+	slices.Sort(q.nodes[:]) // the weights are symmetric
 	quad.Legendre{}.FixedLocations(q.gauss, q.gaussW, -1, 1)
 	for j, tj := range q.nodes {
 		q.barycentric[j] = 1
@@ -62,6 +65,7 @@ func newQuadrature() *quadrature {
 		t := -1 + 2*float64(i)/(finePoints-1)
 		q.fineRule = append(q.fineRule, rulePoint{t, 2.0 / finePoints, q.basis(t)})
 	}
+	q.log = q.graded(0, 1)
 	for i := range q.self {
 		q.self[i] = append(q.graded(q.nodes[i], -1), q.graded(q.nodes[i], 1)...)
 	}

@@ -39,7 +39,7 @@ func (f *Field) Line(from Peak) (Line, error) {
 }
 
 func (f *Field) lineFrom(fc face, at float64, x complex128, u float64, g complex128) (Line, error) {
-	t := &tracer{Field: f, region: f.regionOf(fc), along: 1, tolerance: 1e-6}
+	t := &tracer{Field: f, region: f.regionOf(fc), along: 1, tolerance: 2e-5}
 	_, path := f.values.sides[fc.side].panel.at(at)
 	if into := path * complex(0, -fc.sign); real(g*cmplx.Conj(into)) < 0 {
 		t.along = -1
@@ -75,7 +75,9 @@ func (f *Field) span() float64 {
 const (
 	traceSteps = 3000 // at most
 	traceWide  = 5.0  // extents of the figure a line may go away from its start
-	leastStep  = 1e-9 // of the extent
+	firstStep  = 1e-4 // of the extent
+	leastStep  = 1e-9
+	lastStep   = 2e-4 // within this of a wall a line goes straight to it
 )
 
 // tracer follows a line along the field or across it.
@@ -102,23 +104,30 @@ func (t *tracer) direction(x complex128) (d complex128, u float64, g complex128)
 // estimate (Appl. Math. Lett. 2, 321, 1989), until a wall without a way through, the
 // axis across, or far away. It returns the wall.
 func (t *tracer) follow(start complex128) (*wall, error) {
-	x, h := start, 1e-4
+	x, h := start, firstStep
 	for range traceSteps {
 		d, _, g := t.direction(x)
 		if d == 0 || apart(x, start) > traceWide || t.done != nil && t.done(x) {
 			return nil, nil
 		}
-		h = min(h, t.longest(x, g))
-		next, miss := t.step(x, d, h)
-		if miss > t.tolerance*h && h > leastStep {
-			h = max(h/2, leastStep)
-			continue
-		}
-		if w, at := t.crossed(x, next); w != nil {
-			if x = at; !t.through(w, at) {
-				return w, nil
+		longest := t.longest(x, g)
+		h = min(h, longest)
+		if w, at := t.crossed(x, x+d*complex(h+lastStep, 0)); w != nil {
+			ahead := apart(x, at)
+			if last := min(longest, lastStep); ahead <= last {
+				if x = t.arrive(at); !t.through(w, at) {
+					return w, nil
+				}
+				h = firstStep
+				continue
+			} else {
+				h = min(h, ahead-last/2)
 			}
-			h /= 2
+		}
+		next, miss := t.step(x, d, h)
+		w, _ := t.crossed(x, next)
+		if w != nil || miss > t.tolerance*h && h > leastStep {
+			h = max(h/2, leastStep)
 			continue
 		}
 		if real(next) < 0 {
@@ -178,9 +187,8 @@ func (t *tracer) crossed(x, next complex128) (first *wall, at complex128) {
 	return first, at
 }
 
-// through takes the line to a wall, and beyond it if there is a way.
+// through takes the line beyond a wall, if there is a way.
 func (t *tracer) through(w *wall, at complex128) bool {
-	t.arrive(at)
 	if w.kind != interfaces {
 		return false
 	}

@@ -10,6 +10,7 @@ const (
 	bend       = math.Pi / 2 // most an arc panel turns
 	longRadius = 5           // a natural boundary's panel spans radii up to this ratio
 	precision  = 1e-5        // what may be lost where grading stops
+	shortest   = 1e-7        // no panel is shorter, or rounding would show
 	coarsest   = 1e-4        // length at which it stops, at most
 	kinkFloor  = 1e-5        // where grading towards a jump of curvature stops
 )
@@ -26,11 +27,11 @@ func floorOf(e end) float64 {
 	if !e.irregular {
 		return kinkFloor
 	}
-	return math.Min(coarsest, math.Pow(precision, 1/(2*e.slowest)))
+	return math.Max(shortest, math.Min(coarsest, math.Pow(precision, 1/(2*e.slowest))))
 }
 
 // firstFloor is the same for the first division.
-func firstFloor(e end) float64 { return math.Pow(1e-2, 1/(2*e.slowest)) }
+func firstFloor(e end) float64 { return math.Max(shortest, math.Pow(1e-2, 1/(2*e.slowest))) }
 
 // features lists the irregular points of the model.
 func (m *model) features() (list []feature) {
@@ -105,6 +106,22 @@ func (s *solver) unfit(p *panel, features []feature) bool {
 	}
 	for _, f := range features {
 		if d := p.distance(f.at); d > 1e-9 && p.h > s.reach(w, f)*math.Max(d, f.floor) {
+			return true
+		}
+	}
+	return s.besideSmall(p)
+}
+
+// besideSmall reports whether a panel is much longer than a wall nearby and the
+// distance to it.
+func (s *solver) besideSmall(p *panel) bool {
+	for i := range s.walls {
+		c := &s.walls[i].curve
+		if i == p.wall || s.walls[i].kind == natural || p.h <= nearness*c.length {
+			continue
+		}
+		middle, _ := c.at(c.length / 2)
+		if p.h > nearness*(c.length+p.distance(middle)) {
 			return true
 		}
 	}

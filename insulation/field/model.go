@@ -42,6 +42,7 @@ type end struct {
 	irregular bool    // needs panels graded towards it
 	sharp     bool    // the field has no bound
 	slowest   float64 // exponent of the potential there, the least one
+	beside    bool    // another wall's field has no bound at the same place
 	kink      bool    // the curvature jumps
 }
 
@@ -195,6 +196,9 @@ func (m *model) checkNames() (faults profile.Faults) {
 			faults = append(faults, profile.Fault{Profile: n, What: "every electrode and dielectric has a name of its own"})
 		}
 		seen[n] = true
+	}
+	if len(m.Electrodes) == 0 {
+		faults = append(faults, profile.Fault{What: "there is no electrode"})
 	}
 	for _, e := range m.Electrodes {
 		name(e.Name)

@@ -19,8 +19,9 @@ type Peak struct {
 	t        float64
 }
 
-// smallestError that is claimed: the quadrature is good to about that.
-const smallestError = 1e-6
+// smallestError is claimed even where the last refinement has changed less: what
+// the tails of the panels still hold.
+const smallestError = 1e-4
 
 // Peak is the greatest field on an electrode. An electrode with a sharp edge has
 // none: the lack names the edge.
@@ -34,7 +35,12 @@ func (f *Field) PeakBeyond(electrode string, distance quantity.Length) (Peak, er
 		return Peak{}, err
 	}
 	if f.mirror != nil && f.mirror.earthed && electrode == Earthed {
-		return f.planePeak(), nil
+		plane := f.planePeak()
+		walls, err := f.peak("the electrode "+electrode, float64(distance)/f.unit, func(w *wall) bool { return w.electrode == k })
+		if err == nil && walls.Strength > plane.Strength {
+			return walls, nil
+		}
+		return plane, nil
 	}
 	return f.peak("the electrode "+electrode, float64(distance)/f.unit, func(w *wall) bool { return w.electrode == k })
 }
@@ -116,17 +122,24 @@ func (f *Field) greatestOn(v *values, distance float64, on func(*wall) bool, in 
 	return best, most
 }
 
-// away is the part of a panel at least a distance from the sharp ends of its wall.
-func (f *Field) away(p *panel, distance float64) (from, to float64) {
-	w := &f.walls[p.wall]
-	low, high := p.start, p.start+p.h
-	if w.ends[0].sharp {
-		low = math.Max(low, distance)
-	}
-	if w.ends[1].sharp {
-		high = math.Min(high, w.curve.length-distance)
-	}
+// away is the part of a panel at least a distance from the sharp ends of its wall,
+// and clear of what panels beside a sharp edge cannot hold.
+func (s *solver) away(p *panel, distance float64) (from, to float64) {
+	w := &s.walls[p.wall]
+	low := math.Max(p.start, w.ends[0].clear(distance))
+	high := math.Min(p.start+p.h, w.curve.length-w.ends[1].clear(distance))
 	return 2*(low-p.start)/p.h - 1, 2*(high-p.start)/p.h - 1
+}
+
+// clear is the length from an end over which the field is not looked at.
+func (e end) clear(distance float64) float64 {
+	switch {
+	case e.sharp:
+		return distance
+	case e.beside:
+		return 8 * floorOf(e)
+	}
+	return 0
 }
 
 // sharpOn is a sharp edge on one of the walls, on a side in one of the regions.

@@ -141,9 +141,13 @@ func (m *model) conductorsOf(part []int) map[int]map[int]bool {
 		ends[p] = map[int]bool{}
 	}
 	for _, e := range m.plane.Edges {
+		left, right := e.Left, e.Right
+		if onAxis(e) { // beyond it there is nothing
+			left, right = beside(e), beside(e)
+		}
 		for _, k := range m.electrodesOf(e) {
-			ends[part[e.Left]][m.group[k]] = true
-			ends[part[e.Right]][m.group[k]] = true
+			ends[part[left]][m.group[k]] = true
+			ends[part[right]][m.group[k]] = true
 		}
 	}
 	ends[0][infinity] = true
@@ -154,7 +158,7 @@ func (m *model) conductorsOf(part []int) map[int]map[int]bool {
 func (m *model) outsideEnds() bool {
 	for _, e := range m.plane.Edges {
 		closes := m.owned(e, ofNatural) || m.owned(e, ofEarth)
-		if closes && !onAxis(e) && (e.Left == 0) != (e.Right == 0) {
+		if closes && !m.owned(e, ofMirror) && !onAxis(e) && (e.Left == 0) != (e.Right == 0) {
 			return true
 		}
 	}
@@ -177,7 +181,7 @@ func (m *model) checkOpen() (open profile.Faults) {
 	var loose profile.Faults
 	for _, e := range m.plane.Edges {
 		inside := m.faceOf[e.Left] >= 0 && m.faceOf[e.Right] >= 0
-		if !inside || !m.owned(e, ofNatural) || len(m.electrodesOf(e)) > 0 || onAxis(e) {
+		if !inside || !m.owned(e, ofNatural) || m.owned(e, ofMirror) || len(m.electrodesOf(e)) > 0 || onAxis(e) {
 			continue
 		}
 		for _, n := range []int{e.Start, e.End} {

@@ -101,7 +101,7 @@ func (s *Solution) checkPotentials(potentials map[string]quantity.Voltage) error
 	}
 	var faults profile.Faults
 	for i, pair := range s.tied {
-		if potentials[s.names[pair[0]]] != potentials[s.names[pair[1]]] {
+		if !quantity.Equal(potentials[s.names[pair[0]]], potentials[s.names[pair[1]]]) {
 			faults = append(faults, s.touching[i])
 		}
 	}
@@ -185,6 +185,9 @@ func (s *Solution) coefficient(first, second string) (sum float64, err error) {
 // plane and infinity being one conductor, the coefficients of a row add up to zero.
 func (s *Solution) earthColumn(i int) (sum float64) {
 	for g := range s.groups {
+		if g == s.group[len(s.names)-1] {
+			continue
+		}
 		for k, flux := range s.fluxes(s.fine, g) {
 			if s.group[k] == s.group[i] {
 				sum -= flux * s.unit

@@ -13,7 +13,7 @@ func (m *model) findWalls() (faults profile.Faults) {
 		left, right := m.faceOf[e.Left], m.faceOf[e.Right]
 		electrodes := m.electrodesOf(e)
 		if onAxis(e) {
-			if len(electrodes) > 0 && max(left, right) >= 0 && !m.closedOverAxis(e) {
+			if len(electrodes) > 0 && m.faceOf[beside(e)] >= 0 {
 				faults = append(faults, m.at(e, ofElectrode, "the electrode runs along the axis: a conductor needs a radius"))
 			}
 			continue
@@ -38,13 +38,12 @@ func (m *model) findWalls() (faults profile.Faults) {
 	return faults
 }
 
-// closedOverAxis reports whether what lies beside an edge on the axis is metal.
-func (m *model) closedOverAxis(e profile.Edge) bool {
-	inner := e.Right
+// beside is the face right of an edge on the axis, the axis looked at upwards.
+func beside(e profile.Edge) int {
 	if e.To.Z < e.From.Z {
-		inner = e.Left
+		return e.Left
 	}
-	return m.faceOf[inner] < 0
+	return e.Right
 }
 
 // checkPlane reports what lies too close to be told apart and not close enough to

@@ -29,8 +29,8 @@ const highest = 3.2
 // exponents are those λ > 0, up to the highest, for which r^λ F(φ) is a potential
 // near the edge; the field goes with r^(λ−1). F and ε F'/λ pass through a sector of
 // angle α as through a rotation by λα (Meixner, IEEE Trans. Antennas Propag. 20,
-// 442, 1972; rederived): F = 0 ends at a conductor, F' = 0 at a natural boundary;
-// all around, the rotation of the whole turn has an eigenvalue 1. Accurate to 1e-9.
+// 442, 1972, from memory; rederived): F = 0 ends at a conductor, F' = 0 at a natural boundary;
+// all around, the rotation of the whole turn has an eigenvalue 1. Accurate to 1e-8.
 func (w wedge) exponents() []float64 {
 	if w.start == open {
 		return touches(w.around, highest)

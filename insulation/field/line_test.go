@@ -1,0 +1,160 @@
+package field
+
+import (
+	"math"
+	"testing"
+
+	"kilovet/hv/quantity"
+)
+
+func alone2(hot, cold string) map[string]quantity.Voltage {
+	return map[string]quantity.Voltage{hot: 1000, cold: 0}
+}
+
+// The critical line ends on the other electrode, and the field along it adds up to
+// the voltage.
+func TestCriticalLines(t *testing.T) {
+	for _, c := range []struct{ id, from, to string }{
+		{"z_sphere_box_gap2", "sphere", "ground"},
+		{"a_rod_gap/R=3", "rod", "ground"},
+		{"b1_feedthrough", "pin", "ground"},
+		{"b1_feedthrough", "ground", "pin"},
+		{"c1_annulus0.5", "pin", "ground"},
+		{"c1_annulus0.5", "ground", "pin"},
+		{"c3_outer_gap0.1", "ground", "pin"},
+		{"e_disc_rim1", "disc", "ground"},
+		{"f1_gun", "control", "anode"},
+		{"f3_gun", "anode", "control"},
+	} {
+		ref := reference(t, c.id)
+		f := ref.solve(t)
+		peak, err := f.Peak(c.from)
+		if err != nil {
+			t.Fatal(err)
+		}
+		line, err := f.Line(peak)
+		if err != nil {
+			t.Errorf("%s from %s: %v", c.id, c.from, err)
+			continue
+		}
+		if line.Ends != c.to {
+			t.Errorf("%s from %s: ends on %q, want %s", c.id, c.from, line.Ends, c.to)
+		}
+		first := line.Points[0]
+		within(t, c.id+" field at the start", float64(first.Strength), float64(peak.Strength), 1e-9)
+		sum := 0.0
+		for i := 1; i < len(line.Points); i++ {
+			a, b := line.Points[i-1], line.Points[i]
+			sum += float64(b.Along-a.Along) * float64(a.Strength+b.Strength) / 2
+		}
+		span := (ref.Potentials[c.from] - ref.Potentials[c.to]) * 1e3
+		within(t, c.id+" from "+c.from+": field along the line", sum, math.Abs(span), 3e-3)
+		if n := len(line.Points); n < 20 || n > 400 {
+			t.Errorf("%s: %d points", c.id, n)
+		}
+	}
+}
+
+// Through the layers of a coaxial cable the line is straight and E falls with 1/r.
+func TestLineThroughLayers(t *testing.T) {
+	f := reference(t, "x_coax2_2_5_10_er9.4_1").solve(t)
+	peak, err := f.Peak("inner")
+	if err != nil {
+		t.Fatal(err)
+	}
+	line, err := f.Line(peak)
+	if err != nil || line.Ends != "outer" {
+		t.Fatal(line.Ends, err)
+	}
+	d := math.Log(5.0/2)/9.4 + math.Log(2)
+	seen := map[string]bool{}
+	for _, p := range line.Points {
+		seen[p.Body] = true
+		eps := 1.0
+		if p.Body == "in" {
+			eps = 9.4
+		}
+		within(t, "field on the line", float64(p.Strength), 1000/(eps*float64(p.At.R)*d), 2e-4)
+	}
+	if !seen["in"] || !seen[Medium] {
+		t.Errorf("bodies on the line: %v", seen)
+	}
+}
+
+// Lines of equal potential lie at their level, and around a ball in a box they run
+// from axis to axis.
+func TestEquipotentials(t *testing.T) {
+	for _, id := range []string{"z_sphere_box_gap40", "c1_tight", "d135_chamfer", "f3_gun", "x_two_spheres_5_20_c26_1_-1"} {
+		f := reference(t, id).solve(t)
+		low, span := math.Inf(1), f.span()
+		for _, v := range f.volts {
+			low = math.Min(low, v)
+		}
+		var levels []quantity.Voltage
+		for k := 1; k < 10; k += 2 {
+			levels = append(levels, quantity.Voltage(low+span*(float64(k)+0.001)/10))
+		}
+		lines, err := f.Equipotentials(levels...)
+		if err != nil {
+			t.Errorf("%s: %v", id, err)
+			continue
+		}
+		drawn := map[quantity.Voltage]bool{}
+		for _, l := range lines {
+			drawn[l.Level] = true
+			for i := 0; i < len(l.Points); i += 7 {
+				list, err := f.At(l.Points[i])
+				if err != nil {
+					t.Errorf("%s: %v", id, err)
+					break
+				}
+				if miss := math.Abs(float64(list[0].Potential - l.Level)); miss > 2e-3*span {
+					t.Errorf("%s: %v V at %v on the line of %v V", id, list[0].Potential, l.Points[i], l.Level)
+				}
+			}
+		}
+		if len(drawn) != len(levels) {
+			t.Errorf("%s: %d of %d levels drawn", id, len(drawn), len(levels))
+		}
+		if len(lines) > 4*len(levels) {
+			t.Errorf("%s: %d lines for %d levels", id, len(lines), len(levels))
+		}
+	}
+}
+
+// The readings along the surface of a body: the flux passes, the tangential field is
+// the same, and inside the body, a little off, the field is what the surface says.
+func TestAlongSurfaces(t *testing.T) {
+	f := reference(t, "c1_tight").solve(t)
+	runs, err := f.Along("ceramic")
+	if err != nil || len(runs) != 2 {
+		t.Fatal(len(runs), err)
+	}
+	for _, run := range runs {
+		last := quantity.Length(-1)
+		for _, s := range run {
+			if s.Along <= last {
+				t.Error("places out of order")
+			}
+			last = s.Along
+			if s.Inside.Body != "ceramic" || s.Outside.Body != Medium {
+				t.Fatalf("bodies %q, %q", s.Inside.Body, s.Outside.Body)
+			}
+			normal, along := float64(s.Inside.Radial), float64(s.Inside.Axial)
+			outer, beside := float64(s.Outside.Radial), float64(s.Outside.Axial)
+			if s.Inside.At.Z > 19.9999999e-3 { // the end, across the axis
+				normal, along, outer, beside = along, normal, beside, outer
+			}
+			scale := math.Hypot(outer, beside)
+			if math.Abs(9.4*normal-outer) > 1e-9*scale || math.Abs(along-beside) > 1e-9*scale {
+				t.Errorf("at %v: inside %v, outside %v", s.Inside.At, s.Inside, s.Outside)
+			}
+		}
+	}
+	on := reading(t, f, 7, 10)
+	off := reading(t, f, 6.999, 10)
+	if on.Body != "ceramic" {
+		t.Fatalf("%v: the ceramic is on the left", on)
+	}
+	within(t, "field off the surface", float64(off.Axial), float64(on.Axial), 2e-3)
+}

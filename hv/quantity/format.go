@@ -12,7 +12,7 @@ func Text[Q Number](q Q) string { return q.Dimension().Text(float64(q)) }
 // Text writes an SI value of the dimension for people: four significant digits
 // and, where it is usual, an SI prefix; temperatures in degrees Celsius below
 // 1000 K, times from 1000 s in minutes and from ten hours in hours, fractions in per
-// cent or ppm.
+// cent or ppm. What is smaller than the smallest prefix can say is "below 1 fm".
 func (d *Dimension) Text(v float64) string {
 	switch {
 	case d == temperature && v < 1000:
@@ -28,7 +28,7 @@ func (d *Dimension) Text(v float64) string {
 	case d == pressure:
 		return Significant(v/100) + " mbar"
 	case d == kermaRate:
-		return Significant(v*3600e6) + " µGy/h"
+		return rateText(v * 3600e6)
 	case d == humidity:
 		return Significant(v*1e3) + " g/m3"
 	case d == perKelvin || d == perVolt:
@@ -36,7 +36,7 @@ func (d *Dimension) Text(v float64) string {
 	case !d.prefixed:
 		return Significant(v) + " " + d.SI
 	}
-	return engineering(v, d.SI)
+	return engineering(v, strings.ReplaceAll(d.SI, "ohm", "Ω"))
 }
 
 // DimensionOf finds the dimension whose results carry the SI unit; nil where none does.
@@ -56,9 +56,27 @@ func fractionText(v float64) string {
 	return Significant(v*100) + " %"
 }
 
+// rateText writes an air kerma rate given in µGy/h. A thick wall leaves rates that
+// mean nothing as numbers: natural background is about 0.1 µGy/h.
+func rateText(v float64) string {
+	const least = 1e-6
+	if v > 0 && v < least {
+		return "below " + Significant(least) + " µGy/h"
+	}
+	return Significant(v) + " µGy/h"
+}
+
+// least is the smallest prefix, less what rounds up to it.
+const least = 1e-15 * (1 - 5e-5)
+
 func engineering(v float64, base string) string {
-	if v == 0 {
+	switch {
+	case v == 0:
 		return "0 " + base
+	case v > 0 && v < least:
+		return "below 1 f" + base
+	case v < 0 && v > -least:
+		return "above -1 f" + base
 	}
 	const names = "fpnum kMGT" // 10^-15 … 10^12
 	step := int(math.Floor(math.Log10(math.Abs(v)*(1+5e-5)) / 3))
@@ -70,11 +88,12 @@ func engineering(v float64, base string) string {
 	return Significant(v/math.Pow(1000, float64(step))) + " " + prefix + base
 }
 
-// Significant writes four significant digits without trailing zeros.
+// Significant writes four significant digits without trailing zeros; very small and
+// very large numbers with a power of ten, as in 4e-5.
 func Significant(v float64) string {
 	a := math.Abs(v)
 	if a != 0 && (a < 1e-3 || a >= 1e5) {
-		return strconv.FormatFloat(v, 'g', 4, 64)
+		return powers.Replace(strconv.FormatFloat(v, 'g', 4, 64))
 	}
 	digits := 3
 	if a >= 1 {
@@ -88,3 +107,6 @@ func Significant(v float64) string {
 	}
 	return s
 }
+
+// powers takes the padding out of an exponent: 4e-05 is written 4e-5.
+var powers = strings.NewReplacer("e-0", "e-", "e+0", "e", "e+", "e")

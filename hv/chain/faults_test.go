@@ -43,7 +43,7 @@ name = "gap"
 medium = "air"
 voltage = "20 kV"
 `,
-	"another format": `format = 2  # FAULT 10 range: format: 2 is out of range; accepted: at least 1 and at most 1
+	"another format": `format = 2  # FAULT 10 range: format: 2 is out of range; accepted: 1
 [[spacing]]
 name = "gap"
 medium = "air"

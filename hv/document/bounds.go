@@ -70,8 +70,12 @@ func (b bound) holds(v float64) bool {
 	return quantity.AtMost(x, limit)
 }
 
-// words says the range for people: "more than 0 V and at most 1 MV".
+// words says the range for people: "more than 0 V and at most 1 MV"; a range that
+// holds a single value is that value.
 func (bs bounds) words() string {
+	if len(bs) == 2 && bs[0].sign == ">=" && bs[1].sign == "<=" && bs[0].limit == bs[1].limit {
+		return bs[0].text
+	}
 	parts := make([]string, len(bs))
 	for i, b := range bs {
 		parts[i] = signWords[b.sign] + " " + b.text

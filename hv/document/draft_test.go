@@ -34,7 +34,7 @@ func ExampleDraft() {
 	// Output:
 	// # A room.
 	//
-	// format = 1                                   # format; at least 1 and at most 1
+	// format = 1                                   # format; 1
 	//
 	// [[meter]]                                    # what reads
 	// # clamp: what protects it

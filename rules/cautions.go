@@ -12,7 +12,7 @@ func cautions(c *chain.Chain) []rule.Caution {
 		{Subject: "stored charge", Text: "Capacitors and cables stay charged when all is switched off, and charge themselves again after a discharge. Wait the computed time, discharge every node with the resistor rod, then short and earth it, and leave the earth on."},
 		{Subject: "meters", Text: "Never trust a meter alone: prove it before and after, and earth what it calls dead."},
 		{Subject: "interlocks", Text: "An interlock is the last line, not the switch. Test each one before every run."},
-		{Subject: "ozone", Text: "A discharge in air makes ozone and nitrous gases. A smell or a hiss means corona: switch off and find it."},
+		{Subject: "ozone", Text: "A discharge in air makes ozone and nitrogen oxides. A smell or a hiss means corona: switch off and find it."},
 	}
 	if c.Gun != nil || len(c.Targets) > 0 || c.Vacuum != nil {
 		all = append(all,

@@ -42,7 +42,9 @@ func ClearanceNeeded(g gap.Gap, v gap.Voltages) (gap.Answer[quantity.Length], er
 		return none, err
 	}
 	for i := range asked {
-		asked[i].raise(factor, "the altitude")
+		if !asked[i].aloft {
+			asked[i].raise(factor, "the altitude")
+		}
 	}
 	floor, err := table.PollutionFloor(degreeOn(g), g.Medium == gap.PrintedBoard)
 	if err != nil {
@@ -64,6 +66,7 @@ type demand struct {
 	why     string
 	extra   []gap.Source // of factors
 	assumed []string
+	aloft   bool // the table has a column of its own for heights
 }
 
 // raise multiplies a demand by a factor above 1.
@@ -192,7 +195,7 @@ func boardDemand(g gap.Gap, peak quantity.Voltage) ([]demand, error) {
 		altitude = *g.Altitude
 	}
 	r, err := table.BoardSpacing(peak, g.Board, altitude)
-	return []demand{{Reading: r, why: quantity.Text(peak) + " between conductors of a board"}}, err
+	return []demand{{Reading: r, why: quantity.Text(peak) + " between conductors of a board", aloft: true}}, err
 }
 
 // secondaryDemand is that of IEC 61010-1 where its tables were read; where not, the

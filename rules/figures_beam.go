@@ -8,7 +8,7 @@ import (
 // beam lists what the beam is and how it blurs, in working state.
 func beam(c *collector, e *evidence.Evidence) {
 	const basis = "ripple.beam"
-	if e.Chain().Beam == nil && e.Chain().Gun == nil {
+	if c := e.Chain(); c.Beam == nil && c.Gun == nil || c.Gun != nil && !c.Gun.IsFitted() {
 		return
 	}
 	if electron, err := e.Electron(); err == nil {

@@ -144,10 +144,12 @@ func TestValues(t *testing.T) {
 
 func TestScreenDividesTheCommonMode(t *testing.T) {
 	described := whole()
-	bare := build(described).Element("mains").Wave.Amplitude
+	bare := build(described).Element("heater.feed").Capacitance
 	described.Heater.Feed.Screen = given("screen", true)
-	if got := build(described).Element("mains").Wave.Amplitude; !alike(float64(got*1000), float64(bare)) {
-		t.Errorf("screened %g V, bare %g V", got, bare)
+	screened := build(described)
+	through, taken := screened.Element("heater.feed").Capacitance, screened.Element("heater.feed.screen").Capacitance
+	if !alike(float64(through*1000), float64(bare)) || !alike(float64(through+taken), float64(bare)) {
+		t.Errorf("screened %g F through and %g F to ground, bare %g F", through, taken, bare)
 	}
 	described.Heater.Feed.Kind = given("kind", "battery")
 	if build(described).Element("mains") != nil {

@@ -51,6 +51,13 @@ func (c *Circuit) Join(name, from, to string) *Circuit {
 	return b.circuit()
 }
 
+// Bridge is the circuit with a resistor between two named nodes: a body, a meter, a probe.
+func (c *Circuit) Bridge(name, from, to string, r quantity.Resistance) *Circuit {
+	b := c.rebuild()
+	b.add(Element{Name: name, Kind: Resistor, Role: Load, Resistance: r}, from, to)
+	return b.circuit()
+}
+
 // With is the circuit with one element changed by an edit of its values.
 func (c *Circuit) With(name string, edit func(*Element)) *Circuit {
 	b := c.rebuild()

@@ -80,19 +80,20 @@ func (m *maker) centre(name, end string, value quantity.Resistance, r *chain.Cen
 	m.add(Element{Name: name, Kind: Resistor, Role: Floating, Resistance: value, Permanent: true, Place: r.Here()}, end, "cathode")
 }
 
-// feed adds the capacitance of the isolation transformer and the common mode of
-// its earthed side, reduced by a screen.
+// feed adds the common mode of the earthed side and the capacitance of the isolation
+// transformer; of that a screen takes all but a part to ground.
 func (m *maker) feed(f *chain.Feed) {
 	if f == nil || f.Kind.V == "battery" {
 		return
 	}
-	amplitude := rms(f.CommonMode.V)
-	if f.Screen.V {
-		amplitude /= ScreenFactor
-	}
 	m.add(Element{Name: "mains", Kind: Source, Role: Floating, Permanent: true, Place: f.Here(),
-		Wave: Wave{Sine, amplitude, m.mainsFrequency()}}, "mains", "ground")
-	m.stray("heater.feed", "mains", "cathode", f.Capacitance.V, f.Capacitance.Place)
+		Wave: Wave{Sine, rms(f.CommonMode.V), m.mainsFrequency()}}, "mains", "ground")
+	through := f.Capacitance.V
+	if f.Screen.V {
+		through /= ScreenFactor
+		m.stray("heater.feed.screen", "cathode", "ground", f.Capacitance.V-through, f.Capacitance.Place)
+	}
+	m.stray("heater.feed", "mains", "cathode", through, f.Capacitance.Place)
 }
 
 func (m *maker) mainsFrequency() quantity.Frequency {

@@ -12,7 +12,7 @@ import (
 // (Naidu and Kamaraju, High Voltage Engineering, ch. 2; read).
 const (
 	uniformField quantity.Field = 24.22e5 // V/m
-	uniformRoot                 = 6.08e4  // V/√m: 6.08 kV/√cm
+	uniformRoot  float64        = 6.08e4  // V/√m: 6.08 kV/√cm
 )
 
 // The law was measured from about 0.1 mm to 10 cm and is used to 20 cm (the book's

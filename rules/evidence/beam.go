@@ -25,9 +25,11 @@ func (e *Evidence) Electron() (beam.Electron, error) {
 // Spot is the beam at the specimen, what disturbs it within exposure or dwell included.
 func (e *Evidence) Spot() (beam.Spot, error) {
 	return remember(e, "spot", func() (beam.Spot, error) {
-		b := e.chain.Beam
-		if b == nil {
+		if e.chain.Beam == nil {
 			return beam.Spot{}, lack.Key("beam")
+		}
+		if e.chain.Gun != nil && !e.chain.Gun.IsFitted() {
+			return beam.Spot{}, lack.Failed("without a gun there is no beam")
 		}
 		electron, err := e.Electron()
 		if err != nil {
@@ -107,11 +109,33 @@ func (e *Evidence) disturbLines() ([]beam.Line, error) {
 	if err != nil {
 		return nil, err
 	}
+	tip, err := e.TipSwing()
+	if err != nil {
+		return nil, err
+	}
 	lines := []beam.Line{ripple}
 	if hum.Frequency > 0 {
 		lines = append(lines, beam.Line{Name: "hum", Frequency: hum.Frequency, Amplitude: quantity.Voltage(cmplx.Abs(hum.Cathode)), Form: beam.Sine()})
 	}
+	if tip > 0 {
+		f, err := e.heaterFrequency()
+		if err != nil {
+			return nil, err
+		}
+		lines = append(lines, beam.Line{Name: "heater", Frequency: f, Amplitude: tip, Form: beam.Sine()})
+	}
 	return lines, nil
+}
+
+// heaterFrequency is that of an AC heater: its own, else the mains'.
+func (e *Evidence) heaterFrequency() (quantity.Frequency, error) {
+	if f := e.chain.Heater.Frequency; f.Set() {
+		return f.V, nil
+	}
+	if e.chain.Site == nil {
+		return 0, lack.Key("heater.frequency")
+	}
+	return e.chain.Site.MainsFrequency.Need()
 }
 
 // terms are the harmonics that count: the rest lies below a millionth of the largest.

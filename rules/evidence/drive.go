@@ -79,13 +79,13 @@ func (e *Evidence) held() (quantity.Voltage, error) {
 	nominal := e.condition
 	nominal.Corner = Nominal
 	wrong, err := e.Under(nominal).DividerError()
-	return set * quantity.Voltage(1+wrong), err
+	return set / quantity.Voltage(1-wrong), err
 }
 
 // peakFor finds the peak for a mean at the sensed node by the secant method; the
 // mean is all but proportional to the peak.
 func (e *Evidence) peakFor(set quantity.Voltage) (trial, error) {
-	const good, tries = 1e-10, 12
+	const good, tries = 1e-8, 12
 	node := e.chain.Divider.Senses.Or("output")
 	a := e.chain.Drive.Peak.V
 	va, near, err := e.meanAt(a, node, e.alike())
@@ -101,8 +101,11 @@ func (e *Evidence) peakFor(set quantity.Voltage) (trial, error) {
 		if err != nil {
 			return trial{}, err
 		}
-		if quantity.AtMost(math.Abs(float64(vb/set-1)), good) || vb == va {
+		if quantity.AtMost(math.Abs(float64(vb/set-1)), good) {
 			return trial{b, at}, nil
+		}
+		if quantity.Equal(vb, va) {
+			break
 		}
 		a, b, va, near = b, b+(set-vb)*(b-a)/(vb-va), vb, at
 	}

@@ -1,8 +1,9 @@
 package evidence
 
 import (
+	"math"
+
 	"kilovet/hv/circuit"
-	"kilovet/hv/lack"
 	"kilovet/hv/quantity"
 	"kilovet/hv/steady"
 )
@@ -121,9 +122,26 @@ func (e *Evidence) ArcEnergy(string) (quantity.Energy, error) {
 	return s.Energy, err
 }
 
-// ShortCurrent is the current that the supply drives into a lasting short at a node.
-func (e *Evidence) ShortCurrent(node string) (quantity.Current, error) {
-	return 0, lack.Failed("the current into a lasting short at %s is not computed", node)
+// measuring is the resistance through which a touch current is measured (IEC 60335-1,
+// EN 50191: 2 kohm).
+const measuring quantity.Resistance = 2e3
+
+// TouchCurrent is the mean current that the supply drives through 2 kohm from a node to
+// ground, for as long as it is on.
+func (e *Evidence) TouchCurrent(node string) (quantity.Current, error) {
+	return remember(e, "touch "+e.canonical(node), func() (quantity.Current, error) {
+		c, err := e.Circuit()
+		if err != nil {
+			return 0, err
+		}
+		const body = "measuring resistor"
+		p, err := e.solve(c.Bridge(body, node, "ground", measuring), nil)
+		if err != nil {
+			return 0, err
+		}
+		f, err := p.Through(body)
+		return quantity.Current(math.Abs(float64(f.Mean))), err
+	})
 }
 
 // Discharge is how long a node stays above 60 V after switching off.

@@ -18,6 +18,9 @@ func (e *Evidence) Emission() (quantity.Current, error) {
 	if !g.IsFitted() || e.condition.State != Working {
 		return 0, nil
 	}
+	if m := e.chain.Multiplier; m != nil && !m.Negative() {
+		return 0, lack.Range("an electron gun on a positive supply: its cathode is not below its earthed anode")
+	}
 	if g.Emission.Set() {
 		return g.Emission.V, nil
 	}

@@ -24,7 +24,13 @@ func (e *Evidence) NoLoad() (quantity.Voltage, error) {
 // MultiplierMean is the magnitude of the mean at the top of the smoothing column.
 func (e *Evidence) MultiplierMean() (quantity.Voltage, error) {
 	v, err := e.Potential("multiplier")
-	return magnitude(v), err
+	if e.chain.Multiplier.Negative() {
+		v = -v
+	}
+	if err == nil && v < 0 {
+		return 0, lack.Range("the load pulls the output through zero: the multiplier cannot feed it")
+	}
+	return v, err
 }
 
 // MultiplierMinimum is the smallest magnitude at the top of the smoothing column;

@@ -53,7 +53,7 @@ func (p periodic) between(node, reference string) (network.Swing, error) {
 	return p.Between(a, b)
 }
 
-// rms of the voltage between two nodes, by the trapezoid rule over the steps.
+// rms of the voltage between two nodes, straight between the points of its wave-form.
 func (p periodic) rms(node, reference string) (quantity.Voltage, error) {
 	a, err := p.node(node)
 	if err != nil {
@@ -64,8 +64,11 @@ func (p periodic) rms(node, reference string) (quantity.Voltage, error) {
 		return 0, err
 	}
 	points, err := p.Wave(a, b)
-	if err != nil || len(points) < 2 {
+	if err != nil {
 		return 0, err
+	}
+	if len(points) < 2 {
+		return 0, lack.Failed("there is no wave-form between %s and %s", node, reference)
 	}
 	sum, length := 0.0, float64(points[len(points)-1].Time-points[0].Time)
 	for i, x := range points[1:] {

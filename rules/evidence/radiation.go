@@ -12,10 +12,14 @@ import (
 // surveyDistance is from the outer surface at which the rate is estimated.
 const surveyDistance quantity.Length = 0.1
 
-// Accelerating is the highest voltage that electrons from the cathode can have, over
-// states and corners.
+// Accelerating is the highest voltage that electrons can have, from the cathode or from
+// elsewhere in the vessel to the output, over states and corners.
 func (e *Evidence) Accelerating() (Extreme[quantity.Voltage], error) {
-	return Largest(e, Ratings(), []string{"cathode"}, func(e *Evidence, n string) (quantity.Voltage, error) { return e.Between(n, "ground") })
+	node := "output"
+	if e.chain.HasCathode() {
+		node = "cathode"
+	}
+	return Largest(e, Ratings(), []string{node}, func(e *Evidence, n string) (quantity.Voltage, error) { return e.Between(n, "ground") })
 }
 
 // Radiation is the air kerma rate 0.1 m outside a shield, at a voltage.

@@ -1,11 +1,13 @@
 package evidence
 
 import (
+	"fmt"
 	"math"
 	"math/cmplx"
 
 	"kilovet/hv/circuit"
 	"kilovet/hv/document"
+	"kilovet/hv/gun"
 	"kilovet/hv/lack"
 	"kilovet/hv/quantity"
 	"kilovet/ripple/phasor"
@@ -39,10 +41,24 @@ func (e *Evidence) DriveLines() ([]Line, error) {
 			if err != nil {
 				return nil, err
 			}
-			lines = append(lines, l)
+			lines = append(lines, l.scaled(e.taper(k)))
 		}
 		return lines, nil
 	})
+}
+
+// taper weighs harmonic k of a square drive, whose steps a cut series would overshoot by
+// a tenth (C. Lanczos, Applied Analysis, 1956, ch. IV, from memory).
+func (e *Evidence) taper(k int) float64 {
+	if e.chain.Drive.Waveform.V != "square" {
+		return 1
+	}
+	x := math.Pi * float64(k) / (harmonics + 1)
+	return math.Sin(x) / x
+}
+
+func (l Line) scaled(w float64) Line {
+	return Line{l.Frequency, l.Cathode * complex(w, 0), l.Bias * complex(w, 0)}
 }
 
 // driven holds the multiplier's top and the top of its coupling columns at their
@@ -63,14 +79,27 @@ func (e *Evidence) driven(s periodic, k int) (phasor.Excitation, error) {
 	return x, nil
 }
 
-// tops are the nodes of the multiplier from which anything outside it starts.
+// tops are the nodes of the multiplier and its drive from which anything outside starts,
+// one name each.
 func (e *Evidence) tops(c *circuit.Circuit) []string {
-	nodes := []string{"multiplier"}
-	if pick := c.Element("stray.pickup"); pick != nil {
-		from, _ := pick.Ends()
-		nodes = append(nodes, from)
+	inside, outside := make([]bool, c.Nodes()), make([]bool, c.Nodes())
+	for _, el := range c.Elements {
+		marks := outside
+		if el.Role == circuit.Ladder {
+			marks = inside
+		} else if el.Role == circuit.Stray && el.Name != "stray.pickup" {
+			continue // strays of the columns belong to the multiplier
+		}
+		marks[el.From], marks[el.To] = true, true
 	}
-	return nodes
+	names := []string{"multiplier"}
+	top, _ := c.Node("multiplier")
+	for n := 1; n < c.Nodes(); n++ {
+		if inside[n] && outside[n] && circuit.Node(n) != top {
+			names = append(names, c.Labels(circuit.Node(n))[0])
+		}
+	}
+	return names
 }
 
 // gunSlope loads cathode to control electrode with n I/(cutoff − bias) where that is
@@ -188,10 +217,32 @@ func (e *Evidence) BiasRipple() (quantity.Voltage, error) {
 	return peakToPeak(pick(lines, func(l Line) complex128 { return l.Bias })), nil
 }
 
-// CathodeHum is the hum at the cathode, peak to peak.
+// CathodeHum is the hum at the cathode, peak to peak: the common mode of the feed and
+// the swing of an AC heater, which are taken to add.
 func (e *Evidence) CathodeHum() (quantity.Voltage, error) {
 	l, err := e.Hum()
-	return quantity.Voltage(2 * cmplx.Abs(l.Cathode)), err
+	if err != nil {
+		return 0, err
+	}
+	tip, err := e.TipSwing()
+	return quantity.Voltage(2*cmplx.Abs(l.Cathode)) + 2*tip, err
+}
+
+// TipSwing is the amplitude by which an AC heater swings the tip of the filament against
+// the cathode node; none for a DC heater.
+func (e *Evidence) TipSwing() (quantity.Voltage, error) {
+	h := e.chain.Heater
+	if h == nil || h.Supply.Set() && h.Supply.V == "dc" {
+		return 0, nil
+	}
+	if err := document.Need(h.Supply, h.Voltage); err != nil {
+		return 0, err
+	}
+	amplitude := h.Voltage.V * math.Sqrt2
+	if h.CentreResistors == nil {
+		return gun.TipSwingReturn(amplitude), nil
+	}
+	return gun.TipSwing(amplitude, h.CentreResistors.Value.V[0], h.CentreResistors.Value.V[1])
 }
 
 // CathodeDisturbance is the linear sum of ripple and hum.
@@ -218,7 +269,10 @@ func (e *Evidence) RippleAssumptions() []string {
 		all = append(all, "pickup from coupling column to output "+quantity.Text(circuit.AssumedPickup)+" (common practice, no source)")
 	}
 	if h := c.Heater; h != nil && h.Feed != nil && h.Feed.Screen.V && h.Feed.CommonMode.V > 0 {
-		all = append(all, "the screen of the heater feed divides the common mode by 1000")
+		all = append(all, "the screen of the heater feed divides the coupled common mode by "+fmt.Sprint(circuit.ScreenFactor))
+	}
+	if c.Gun.IsFitted() && c.Gun.Emission.Set() && !c.Gun.Cutoff.Set() {
+		all = append(all, "the gun draws a constant current: its cutoff is not given")
 	}
 	return all
 }

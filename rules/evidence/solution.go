@@ -63,7 +63,27 @@ func (e *Evidence) Potential(node string) (quantity.Voltage, error) {
 // the drive.
 func (e *Evidence) Between(a, b string) (quantity.Voltage, error) {
 	s, err := e.swing(a, b)
-	return s.Peak(), err
+	if err != nil || a != mainsNode && b != mainsNode {
+		return s.Peak(), err
+	}
+	common, err := e.mainsPeak()
+	return s.Peak() + common, err
+}
+
+// mainsNode is the earthed side of the heater feed. It swings at the frequency of the
+// mains, which a period of the drive does not show.
+const mainsNode = "mains"
+
+// mainsPeak is the peak of the earthed side to ground: its common mode where stated,
+// else that of the mains.
+func (e *Evidence) mainsPeak() (quantity.Voltage, error) {
+	if h := e.chain.Heater; h != nil && h.Feed != nil && h.Feed.CommonMode.Set() {
+		return h.Feed.CommonMode.V * math.Sqrt2, nil
+	}
+	if e.chain.Site == nil || !e.chain.Site.Mains.Set() {
+		return 0, lack.Key("heater.feed.common_mode", "site.mains")
+	}
+	return e.chain.Site.Mains.V * math.Sqrt2, nil
 }
 
 // RMS is the r.m.s. voltage between two nodes: of a DC voltage its magnitude.

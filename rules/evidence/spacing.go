@@ -3,6 +3,7 @@ package evidence
 import (
 	"kilovet/hv/chain"
 	"kilovet/hv/circuit"
+	"kilovet/hv/document"
 	"kilovet/hv/quantity"
 	"kilovet/insulation"
 	"kilovet/insulation/gap"
@@ -12,6 +13,7 @@ import (
 type Spacing struct {
 	Voltages   gap.Voltages
 	Under      Condition // where the peak occurs
+	Lasting    Condition // where the lasting voltage is highest
 	Gap        gap.Gap
 	Assessment insulation.Assessment
 }
@@ -20,32 +22,37 @@ type Spacing struct {
 // corners, the lasting voltage over those that can stand for long.
 func (e *Evidence) Spacing(s *chain.Spacing) (Spacing, error) {
 	return remember(e.Under(Condition{}), "spacing "+s.Name.V, func() (Spacing, error) {
-		v, under, err := e.across(s)
+		if s.Medium.V == "gas" {
+			if err := document.Need(s.Gas, s.Pressure); err != nil {
+				return Spacing{}, err
+			}
+		}
+		v, under, lasting, err := e.across(s)
 		if err != nil {
 			return Spacing{}, err
 		}
 		g := e.gap(s)
-		return Spacing{v, under, g, insulation.Assess(g, v)}, nil
+		return Spacing{v, under, lasting, g, insulation.Assess(g, v)}, nil
 	})
 }
 
-func (e *Evidence) across(s *chain.Spacing) (gap.Voltages, Condition, error) {
+func (e *Evidence) across(s *chain.Spacing) (v gap.Voltages, under, long Condition, err error) {
 	if s.Voltage.Set() {
-		return gap.Voltages{Peak: s.Voltage.V, LongTerm: s.Voltage.V}, Condition{}, nil
+		return gap.Voltages{Peak: s.Voltage.V, LongTerm: s.Voltage.V}, under, long, nil
 	}
 	live := append([]string{s.From.V}, s.Also.V...)
 	peak, err := Largest(e, Ratings(), live, func(e *Evidence, n string) (quantity.Voltage, error) { return e.Between(n, s.To.V) })
 	if err != nil {
-		return gap.Voltages{}, peak.Under, err
+		return v, under, long, err
 	}
 	lasting, err := Largest(e, LongTerm(), live, func(e *Evidence, n string) (quantity.Voltage, error) { return e.RMS(n, s.To.V) })
 	if err != nil {
-		return gap.Voltages{}, peak.Under, err
+		return v, under, long, err
 	}
 	// Which electrode is the sharper one is not described: the worse polarity judges.
-	v := gap.Voltages{Peak: peak.Value, LongTerm: lasting.Value, Sharp: gap.Unknown}
+	v = gap.Voltages{Peak: peak.Value, LongTerm: lasting.Value, Sharp: gap.Unknown}
 	err = e.alternating(s, live, &v)
-	return v, peak.Under, err
+	return v, peak.Under, lasting.Under, err
 }
 
 // alternating adds the swing of a drive at or above 30 kHz.

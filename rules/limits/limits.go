@@ -41,6 +41,15 @@ const (
 	NoPowerAbove quantity.Temperature = 155 + 273.15
 )
 
+// Shares of half a period that the recovery of a diode may take.
+const (
+	RecoveryShare   = 0.1
+	RecoveryComfort = 0.02
+)
+
+// RecoverySource is where they come from.
+var RecoverySource = practice("reverse recovery is short against half a period of the drive; the charge it carries back is lost each period")
+
 // FeedTest is the least ratio of the test voltage of a heater feed to its highest
 // working voltage: common practice (1.2 to 2 times the working DC voltage), from memory.
 const FeedTest = 1.2

@@ -10,6 +10,8 @@ import (
 // below theirs.
 const (
 	TouchVoltage quantity.Voltage = 60     // DC; edition 3, clause from memory
+	TouchPeak    quantity.Voltage = 42.4   // peak of an alternating voltage
+	TouchRipple                   = 0.1    // a direct voltage that swings by more counts as alternating
 	TouchCurrent quantity.Current = 2e-3   // DC
 	TouchCharge  quantity.Charge  = 45e-6  // up to ChargeRuleTo
 	TouchEnergy  quantity.Energy  = 350e-3 // above it
@@ -21,7 +23,7 @@ const (
 
 // The sources of the touch limits.
 var (
-	TouchVoltageSource = rule.Source{Text: "IEC 61010-1:2010 6.3.1 a): 60 V DC in normal condition", Mark: rule.Memory, Governs: true}
+	TouchVoltageSource = rule.Source{Text: "IEC 61010-1:2010 6.3.1 a): 60 V DC, 42.4 V peak in normal condition", Mark: rule.Memory, Governs: true}
 	TouchFaultSource   = rule.Source{Text: "IEC 61010-1:2010 6.3.2 a): 120 V DC in single fault condition", Mark: rule.Memory, Governs: true}
 	TouchCurrentSource = rule.Source{Text: "IEC 61010-1 6.3.1 b): 2 mA DC (read in an analyser's limit table, edition 2)", Mark: rule.Read, Governs: true}
 	TouchChargeSource  = rule.Source{Text: "IEC 61010-1 6.3.1 c): 45 µC up to 15 kV (read in a quotation; same figure in IEC 60335-1 8.1.4)", Mark: rule.Read, Governs: true}

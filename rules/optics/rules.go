@@ -5,6 +5,7 @@ import (
 	"fmt"
 	"math"
 
+	"kilovet/hv/document"
 	"kilovet/hv/quantity"
 	"kilovet/rules/evidence"
 	"kilovet/rules/rule"
@@ -29,6 +30,9 @@ var blur = rule.Rule{
 		b := e.Chain().Beam
 		if b == nil || !b.BlurAllowance.Set() {
 			return rule.Over("no blur allowance is stated")
+		}
+		if g := e.Chain().Gun; g != nil && !g.IsFitted() {
+			return rule.Over("the gun is not fitted")
 		}
 		f := rule.Finding{Rule: "beam.blur", Subject: "beam", Concern: rule.Performance, Relation: rule.AtMost, Place: b.BlurAllowance.Place,
 			Under: string(evidence.Working), Sources: []rule.Source{blurSource}, Remedy: "see beam.ripple_allowed: more filtering, or less source width, angle or aberration"}
@@ -79,5 +83,41 @@ var emissionLaw = rule.Rule{
 	},
 }
 
+var limitSource = rule.Source{Text: "Richardson's law for the emitting area at its temperature; near it the filament's temperature governs, not the bias", Mark: rule.Derived, Governs: true}
+
+// emissionComfort is the share of the cathode's limit above which its temperature governs.
+const emissionComfort = 0.8
+
+var emissionLimit = rule.Rule{
+	ID: "gun.emission_limit", Title: "Emission against the cathode's limit",
+	Demands: "The emission is at most what the emitting area gives at its temperature.",
+	Applies: "Where emitting area, cathode temperature and work function are given.",
+	Margin:  "marginal above 80 % of the limit",
+	Concern: rule.Performance,
+	Sources: []rule.Source{limitSource},
+	Example: rule.Example{
+		Swaps:   []rule.Swap{{Was: `emitting_area       = "0.03 mm2"`, Becomes: `emitting_area       = "0.003 mm2"`}},
+		Changes: []rule.Change{{Rule: "gun.emission_limit", Subject: "gun", Verdict: rule.Fails}},
+	},
+	Judge: func(e *evidence.Evidence) rule.Judgement {
+		g := e.Chain().Gun
+		if !g.IsFitted() || document.Need(g.EmittingArea, g.CathodeTemperature, g.WorkFunction) != nil {
+			return rule.Over("the limit of the cathode is not described")
+		}
+		f := rule.Finding{Rule: "gun.emission_limit", Subject: "gun", Concern: rule.Performance, Relation: rule.AtMost, Place: g.EmittingArea.Place,
+			Under: string(evidence.Working), Sources: []rule.Source{limitSource}, Remedy: "correct emission, area or temperature; a hotter cathode lives shorter"}
+		limit, err := e.RichardsonLimit()
+		if err != nil {
+			return one(f.Lacking(err))
+		}
+		i, err := e.Emission()
+		if err != nil {
+			return one(f.Lacking(err))
+		}
+		f.Because = fmt.Sprintf("%s of the %s that the cathode can give", quantity.Text(i), quantity.Text(limit))
+		return one(f.Most(rule.Of(i), rule.Of(limit), 1/emissionComfort-1).WithoutRemedyIfMet())
+	},
+}
+
 // Rules lists the rules of this family.
-func Rules() []rule.Rule { return []rule.Rule{blur, emissionLaw} }
+func Rules() []rule.Rule { return []rule.Rule{blur, emissionLaw, emissionLimit} }

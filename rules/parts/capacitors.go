@@ -29,13 +29,15 @@ var capacitorVoltage = rule.Rule{
 	},
 }
 
-func isCapacitor(el circuit.Element) bool { return el.CapacitorPart != nil }
+func isCapacitor(el circuit.Element) bool { return isA(circuit.Capacitor, el) }
+
+func hasDielectric(el circuit.Element) bool { return el.CapacitorPart != nil }
 
 func judgeCapacitor(e *evidence.Evidence, g group) rule.Finding {
-	part := g.elements[0].CapacitorPart
-	f := about("capacitor.voltage", rule.Equipment, g, part.RatedVoltage.Place)
-	r := rating[quantity.Voltage]{what: "voltage", rated: part.RatedVoltage.V, given: part.RatedVoltage.Set(), key: part.RatedVoltage.Key,
-		derating: limits.CapacitorVoltage, conditions: evidence.Ratings(), stress: (*evidence.Evidence).ElementPeak}
+	part := ratingsOf(g.elements[0])
+	f := about("capacitor.voltage", rule.Equipment, g, part.voltage.Place)
+	r := rating[quantity.Voltage]{what: "voltage", rated: part.voltage.V, given: part.voltage.Set(), key: part.voltage.Key,
+		derating: limits.CapacitorVoltage, conditions: evidence.Ratings(), stress: (*evidence.Evidence).ElementPeak, tolerance: &part.tolerance}
 	return r.judge(e, g, f)
 }
 
@@ -50,7 +52,7 @@ var capacitorDielectric = rule.Rule{
 		Changes: []rule.Change{{Rule: "capacitor.dielectric", Subject: "bias.bypass", Verdict: rule.Marginal}},
 	},
 	Judge: func(e *evidence.Evidence) rule.Judgement {
-		return each(groups(e, isCapacitor), "no capacitor is described", judgeDielectric)
+		return each(groups(e, hasDielectric), "no capacitor is described", judgeDielectric)
 	},
 }
 

@@ -6,6 +6,7 @@ import (
 
 	"kilovet/hv/circuit"
 	"kilovet/hv/document"
+	"kilovet/hv/quantity"
 	"kilovet/rules/evidence"
 	"kilovet/rules/rule"
 )
@@ -59,6 +60,34 @@ func about(id string, concern rule.Concern, g group, at document.Place) rule.Fin
 		at.Line, at.Column = g.elements[0].Place.Line, g.elements[0].Place.Column
 	}
 	return rule.Finding{Rule: id, Subject: g.subject, Concern: concern, Place: at}
+}
+
+// ratings of one part, whether it has a table of its own or is a loose one.
+type ratings struct {
+	voltage, pulseVoltage document.Given[quantity.Voltage]
+	power                 document.Given[quantity.Power]
+	energy                document.Given[quantity.Energy]
+	tolerance             document.Given[quantity.Fraction]
+	count, strings        int
+}
+
+func ratingsOf(el circuit.Element) ratings {
+	switch {
+	case el.ResistorPart != nil:
+		p := el.ResistorPart
+		count, strings := p.Elements()
+		return ratings{p.RatedVoltage, p.RatedPulseVoltage, p.RatedPower, p.RatedEnergy, p.Tolerance, count, strings}
+	case el.CapacitorPart != nil:
+		return ratings{voltage: el.CapacitorPart.RatedVoltage, tolerance: el.CapacitorPart.Tolerance, count: 1, strings: 1}
+	}
+	p := el.LoosePart
+	return ratings{p.RatedVoltage, p.RatedPulseVoltage, p.RatedPower, p.RatedEnergy, p.Tolerance, 1, 1}
+}
+
+// isA reports whether an element of a kind is a described part.
+func isA(kind circuit.Kind, el circuit.Element) bool {
+	loose := el.LoosePart != nil && el.LoosePart.Kind.V != "meter"
+	return el.Kind == kind && (el.CapacitorPart != nil || el.ResistorPart != nil || loose)
 }
 
 // each judges every group, or says that there is none.

@@ -11,7 +11,7 @@ import (
 	"kilovet/rules/rule"
 )
 
-func isResistor(el circuit.Element) bool { return el.ResistorPart != nil }
+func isResistor(el circuit.Element) bool { return isA(circuit.Resistor, el) }
 
 var resistorVoltage = rule.Rule{
 	ID: "resistor.voltage", Title: "Resistor voltage",
@@ -26,15 +26,14 @@ var resistorVoltage = rule.Rule{
 	},
 	Judge: func(e *evidence.Evidence) rule.Judgement {
 		return each(groups(e, isResistor), "no resistor is described", func(g group) rule.Finding {
-			part := g.elements[0].ResistorPart
-			count, _ := part.Elements()
+			part := ratingsOf(g.elements[0])
 			perElement := func(e *evidence.Evidence, name string) (quantity.Voltage, error) {
 				v, err := e.ElementPeak(name)
-				return v / quantity.Voltage(count), err
+				return v / quantity.Voltage(part.count), err
 			}
-			r := rating[quantity.Voltage]{what: "voltage of each element", rated: part.RatedVoltage.V, given: part.RatedVoltage.Set(), key: part.RatedVoltage.Key,
-				derating: limits.ResistorVoltage, conditions: evidence.Ratings(), stress: perElement}
-			return r.judge(e, g, about("resistor.voltage", rule.Equipment, g, part.RatedVoltage.Place))
+			r := rating[quantity.Voltage]{what: "voltage of each element", rated: part.voltage.V, given: part.voltage.Set(), key: part.voltage.Key,
+				derating: limits.ResistorVoltage, conditions: evidence.Ratings(), stress: perElement, tolerance: &part.tolerance}
+			return r.judge(e, g, about("resistor.voltage", rule.Equipment, g, part.voltage.Place))
 		})
 	},
 }
@@ -56,9 +55,8 @@ var resistorPower = rule.Rule{
 }
 
 func judgePower(e *evidence.Evidence, g group) rule.Finding {
-	part := g.elements[0].ResistorPart
-	f := about("resistor.power", rule.Equipment, g, part.RatedPower.Place)
-	count, strings := part.Elements()
+	part := ratingsOf(g.elements[0])
+	f := about("resistor.power", rule.Equipment, g, part.power.Place)
 	share, err := ambientShare(e)
 	if err != nil {
 		f.Relation = rule.AtMost
@@ -66,10 +64,10 @@ func judgePower(e *evidence.Evidence, g group) rule.Finding {
 	}
 	perElement := func(e *evidence.Evidence, name string) (quantity.Power, error) {
 		p, err := e.ElementPower(name)
-		return p / quantity.Power(count*strings), err
+		return p / quantity.Power(part.count*part.strings), err
 	}
-	r := rating[quantity.Power]{what: "power of each element", rated: part.RatedPower.V * quantity.Power(share), given: part.RatedPower.Set(), key: part.RatedPower.Key,
-		derating: limits.ResistorPower, conditions: evidence.Ratings(), stress: perElement}
+	r := rating[quantity.Power]{what: "power of each element", rated: part.power.V * quantity.Power(share), given: part.power.Set(), key: part.power.Key,
+		derating: limits.ResistorPower, conditions: evidence.Ratings(), stress: perElement, tolerance: &part.tolerance}
 	return r.judge(e, g, f)
 }
 
@@ -81,7 +79,7 @@ func ambientShare(e *evidence.Evidence) (float64, error) {
 		return 0, lack.Key("site.air_temperature")
 	}
 	t := site.AirTemperature.V
-	if t >= limits.NoPowerAbove {
+	if quantity.AtLeast(t, limits.NoPowerAbove) {
 		return 0, lack.Range("air at %s leaves a film resistor no power", quantity.Text(t))
 	}
 	share := float64((limits.NoPowerAbove - t) / (limits.NoPowerAbove - limits.FullPowerTo))
@@ -104,26 +102,25 @@ var arcVoltage = rule.Rule{
 	},
 }
 
-func isSeries(el circuit.Element) bool { return el.ResistorPart != nil && el.Role == circuit.Series }
+func isSeries(el circuit.Element) bool { return isResistor(el) && el.Role == circuit.Series }
 
 func judgeArcVoltage(e *evidence.Evidence, g group) rule.Finding {
-	part := g.elements[0].ResistorPart
-	rated, pulse := part.RatedPulseVoltage, true
+	part := ratingsOf(g.elements[0])
+	rated, pulse := part.pulseVoltage, true
 	if !rated.Set() {
-		rated, pulse = part.RatedVoltage, false
+		rated, pulse = part.voltage, false
 	}
 	f := about("series.arc_voltage", rule.Equipment, g, rated.Place)
-	count, _ := part.Elements()
 	full := func(e *evidence.Evidence, name string) (quantity.Voltage, error) {
 		v, err := e.ArcVoltage(name)
-		return v / quantity.Voltage(count), err
+		return v / quantity.Voltage(part.count), err
 	}
-	r := rating[quantity.Voltage]{what: "arc voltage of each element", rated: rated.V, given: rated.Set(), key: part.RatedPulseVoltage.Key,
+	r := rating[quantity.Voltage]{what: "arc voltage of each element", rated: rated.V, given: rated.Set(), key: part.pulseVoltage.Key,
 		derating: limits.SinglePulse, conditions: evidence.Ratings(), stress: full}
 	f = r.judge(e, g, f)
 	f.Sources = append(f.Sources, limits.ArcSource)
 	if !pulse && rated.Set() {
-		f.Because += fmt.Sprintf(" (no %s given: the continuous rating judges)", part.RatedPulseVoltage.Key)
+		f.Because += fmt.Sprintf(" (no %s given: the continuous rating judges)", part.pulseVoltage.Key)
 	}
 	return f
 }
@@ -149,14 +146,13 @@ var arcEnergy = rule.Rule{
 func isDamping(el circuit.Element) bool { return isSeries(el) && el.Name != "bias.resistor" }
 
 func judgeArcEnergy(e *evidence.Evidence, g group) rule.Finding {
-	part := g.elements[0].ResistorPart
-	f := about("series.arc_energy", rule.Equipment, g, part.RatedEnergy.Place)
-	count, strings := part.Elements()
+	part := ratingsOf(g.elements[0])
+	f := about("series.arc_energy", rule.Equipment, g, part.energy.Place)
 	released := func(e *evidence.Evidence, name string) (quantity.Energy, error) {
 		w, err := e.ArcEnergy(name)
-		return w / quantity.Energy(count*strings), err
+		return w / quantity.Energy(part.count*part.strings), err
 	}
-	r := rating[quantity.Energy]{what: "arc energy of each element", rated: part.RatedEnergy.V, given: part.RatedEnergy.Set(), key: part.RatedEnergy.Key,
+	r := rating[quantity.Energy]{what: "arc energy of each element", rated: part.energy.V, given: part.energy.Set(), key: part.energy.Key,
 		derating: limits.SinglePulse, conditions: evidence.Ratings(), stress: released}
 	f = r.judge(e, g, f)
 	f.Sources = append(f.Sources, limits.ArcSource)

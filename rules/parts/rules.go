@@ -8,8 +8,8 @@ import (
 // Rules lists the rules of this family.
 func Rules() []rule.Rule {
 	return []rule.Rule{
-		capacitorVoltage, capacitorDielectric, diodeReverse, diodeCurrent,
-		resistorVoltage, resistorPower, arcVoltage, arcEnergy, cableVoltage, feedVoltage, feedTest,
+		capacitorVoltage, capacitorDielectric, diodeReverse, diodeCurrent, diodeRecovery,
+		resistorVoltage, resistorPower, arcVoltage, arcEnergy, gapStrikes, cableVoltage, feedVoltage, feedTest,
 	}
 }
 

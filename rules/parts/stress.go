@@ -3,6 +3,7 @@ package parts
 import (
 	"fmt"
 
+	"kilovet/hv/document"
 	"kilovet/hv/quantity"
 	"kilovet/rules/evidence"
 	"kilovet/rules/limits"
@@ -18,6 +19,8 @@ type rating[Q quantity.Number] struct {
 	derating   limits.Derating
 	conditions []evidence.Condition
 	stress     func(*evidence.Evidence, string) (Q, error)
+	// tolerance of the part's value, where it has one: not given, it counts as none.
+	tolerance *document.Given[quantity.Fraction]
 }
 
 // judge fills in a finding: the largest stress over conditions and elements against
@@ -35,6 +38,9 @@ func (r rating[Q]) judge(e *evidence.Evidence, g group, f rule.Finding) rule.Fin
 	}
 	f.Under = most.Under.Text()
 	f.Because = fmt.Sprintf("%s of %s reaches %s of the %s rated", r.what, most.Name, quantity.Text(most.Value), quantity.Text(r.rated))
+	if r.tolerance != nil && !r.tolerance.Set() {
+		f = f.Assume("the value of " + g.subject + " is exact: its tolerance is not given")
+	}
 	f = f.Most(rule.Of(most.Value), rule.Of(Q(float64(r.rated)*float64(r.derating.Fails))), r.derating.Margin())
 	return f.WithoutRemedyIfMet()
 }

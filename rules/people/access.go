@@ -2,6 +2,7 @@ package people
 
 import (
 	"fmt"
+	"strings"
 
 	"kilovet/hv/chain"
 	"kilovet/hv/document"
@@ -84,7 +85,11 @@ func judgeInterlock(access *chain.Access, f rule.Finding) rule.Finding {
 		f.Because, f.Remedy, f.Relation, f.Place = "it comes back by itself when the door closes", "make restart a deliberate act", rule.Presence, lock.Restart.Place
 		return f.There(false)
 	}
-	f.Because = fmt.Sprintf("%d switches at each door act on the %s", lock.Switches.V, lock.ActsOn.V)
+	if !strings.Contains(lock.ActsOn.V, "drive") && !strings.Contains(lock.ActsOn.V, "mains") {
+		f.Because, f.Remedy, f.Relation, f.Place = "it acts on the "+lock.ActsOn.V+", not on the drive supply", "let it cut the drive supply or its mains", rule.Presence, lock.ActsOn.Place
+		return f.There(false)
+	}
+	f.Because = fmt.Sprintf("switches at each door: %d; they act on the %s", lock.Switches.V, lock.ActsOn.V)
 	f.Remedy = "fit two independent switches at each door"
 	return f.Least(count(lock.Switches.V), count(2), 0).WithoutRemedyIfMet()
 }

@@ -104,19 +104,19 @@ func judgeRedundancy(e *evidence.Evidence) rule.Judgement {
 	if !access.WaitingTime.Set() {
 		return *only(f.Lacking(missing(access.WaitingTime.Key)))
 	}
-	good, all, err := strings(e, access.WaitingTime.V)
+	good, all, err := countStrings(e, access.WaitingTime.V)
 	if err != nil {
 		return *only(f.Lacking(err))
 	}
-	f.Because = fmt.Sprintf("%d of %d permanent strings to ground discharge the chain alone within %s", good, all, quantity.Text(access.WaitingTime.V))
+	f.Because = fmt.Sprintf("permanent strings to ground that discharge the chain alone within %[3]s: %[1]d of %[2]d", good, all, quantity.Text(access.WaitingTime.V))
 	f.Remedy = "fit a second permanent bleeder string that meets the waiting time alone"
 	return *only(f.Least(count(good), count(2), 0).WithoutRemedyIfMet())
 }
 
 func count(n int) rule.Amount { return rule.Amount{Value: float64(n), Unit: "1"} }
 
-// strings counts the permanent strings to ground, and those that alone meet a time.
-func strings(e *evidence.Evidence, within quantity.Time) (good, all int, err error) {
+// countStrings counts the permanent strings to ground, and those that alone meet a time.
+func countStrings(e *evidence.Evidence, within quantity.Time) (good, all int, err error) {
 	for _, el := range e.Layout().Elements {
 		if !bleeds(el) {
 			continue
@@ -127,7 +127,7 @@ func strings(e *evidence.Evidence, within quantity.Time) (good, all int, err err
 		if err != nil {
 			return 0, 0, err
 		}
-		_, n := el.ResistorPart.Elements()
+		n := stringsOf(el)
 		all += n
 		if !d.Never && quantity.AtMost(d.Time, within) {
 			good += n
@@ -138,12 +138,21 @@ func strings(e *evidence.Evidence, within quantity.Time) (good, all int, err err
 
 // bleeds reports whether an element is the upper end of a permanent string to ground.
 func bleeds(el circuit.Element) bool {
-	return el.Permanent && el.Role == circuit.Load && el.ResistorPart != nil && el.Name != "divider.lower"
+	return el.Permanent && el.Role == circuit.Load && el.Kind == circuit.Resistor && el.Name != "divider.lower"
+}
+
+// stringsOf is the number of parallel strings an element stands for.
+func stringsOf(el circuit.Element) int {
+	if el.ResistorPart == nil {
+		return 1
+	}
+	_, n := el.ResistorPart.Elements()
+	return n
 }
 
 // alone leaves of all permanent strings one string of one part.
 func alone(keep circuit.Element) evidence.Fault {
-	_, n := keep.ResistorPart.Elements()
+	n := stringsOf(keep)
 	return evidence.Fault{Name: "only one string of " + keep.Name + " left", Edit: func(c *circuit.Circuit) *circuit.Circuit {
 		return c.Each(func(el *circuit.Element) bool {
 			if el.Name == keep.Name {

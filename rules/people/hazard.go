@@ -19,8 +19,8 @@ func delivers(s evidence.Short, v quantity.Voltage) (provided, needed rule.Amoun
 	return rule.Of(s.Energy), rule.Of(limits.TouchEnergy), limits.TouchEnergySource
 }
 
-// hazardous finds the first node at which a short delivers more than may be touched,
-// in any state.
+// hazardous finds the first node that is above the touch voltage and not limited in
+// current, charge and energy, in any state. What is not known counts as not limited.
 func hazardous(e *evidence.Evidence) (node string, found bool, err error) {
 	for _, state := range evidence.States {
 		in := e.Under(evidence.Condition{State: state})
@@ -44,7 +44,11 @@ func exceeds(e *evidence.Evidence, node string) (bool, error) {
 		return false, err
 	}
 	provided, needed, _ := delivers(short, v)
-	return !quantity.AtMost(provided.Value, needed.Value), nil
+	if !quantity.AtMost(provided.Value, needed.Value) {
+		return true, nil
+	}
+	i, err := e.TouchCurrent(node)
+	return err != nil || !quantity.AtMost(i, limits.TouchCurrent), nil
 }
 
 // needsCare starts a rule that is mandatory where there is hazardous charge. It

@@ -2,6 +2,7 @@ package people
 
 import (
 	"fmt"
+	"slices"
 
 	"kilovet/hv/lack"
 	"kilovet/hv/quantity"
@@ -40,7 +41,10 @@ func judgeTouch(e *evidence.Evidence) rule.Judgement {
 		return *only(f.Lacking(missing("access.touchable")))
 	}
 	var j rule.Judgement
-	for _, node := range access.Touchable.V {
+	for i, node := range access.Touchable.V {
+		if slices.Contains(access.Touchable.V[:i], node) {
+			continue
+		}
 		f.Subject, f.Place = node, access.Touchable.Place
 		j.Findings = append(j.Findings, touchable(e, node, f))
 	}
@@ -62,11 +66,32 @@ func touchable(e *evidence.Evidence, node string, f rule.Finding) rule.Finding {
 	}
 	f.Under = most.Under.Text()
 	f.Because = fmt.Sprintf("%s reaches %s", node, quantity.Text(most.Value))
-	if quantity.AtMost(most.Value, limits.TouchVoltage) {
-		return f.Most(rule.Of(most.Value), rule.Of(limits.TouchVoltage), 0)
+	limit, err := touchLimit(e.Under(most.Under), node)
+	if err != nil {
+		return f.Lacking(err)
+	}
+	if quantity.AtMost(most.Value, limit) {
+		return f.Most(rule.Of(most.Value), rule.Of(limit), 0)
 	}
 	f.Remedy = "put it out of reach, or limit its voltage, current and charge"
 	return limited(e.Under(most.Under), node, most.Value, f)
+}
+
+// touchLimit is the voltage that may be touched: that of a direct voltage, or the peak
+// of an alternating one where more than a tenth of it swings.
+func touchLimit(e *evidence.Evidence, node string) (quantity.Voltage, error) {
+	peak, err := e.Between(node, "ground")
+	if err != nil {
+		return 0, err
+	}
+	swing, err := e.Swing(node, "ground")
+	if err != nil {
+		return 0, err
+	}
+	if node == "mains" || !quantity.AtMost(swing/2, peak*limits.TouchRipple) {
+		return limits.TouchPeak, nil
+	}
+	return limits.TouchVoltage, nil
 }
 
 // limited judges a node above the touch voltage by its charge or energy; without a
@@ -78,15 +103,15 @@ func limited(e *evidence.Evidence, node string, v quantity.Voltage, f rule.Findi
 	}
 	provided, needed, source := delivers(short, v)
 	f.Sources = append(f.Sources, source)
-	f.Because += fmt.Sprintf(", above 60 V, and delivers %s and %s in a short", quantity.Text(short.Charge), quantity.Text(short.Energy))
+	f.Because += fmt.Sprintf(", above what may be touched, and delivers %s and %s in a short", quantity.Text(short.Charge), quantity.Text(short.Energy))
 	if !quantity.AtMost(provided.Value, needed.Value) {
 		return f.Most(provided, needed, 0)
 	}
-	current, err := e.ShortCurrent(node)
+	current, err := e.TouchCurrent(node)
 	if err != nil {
 		return f.Lacking(err)
 	}
 	f.Sources = append(f.Sources, limits.TouchCurrentSource)
-	f.Because += fmt.Sprintf("; the supply drives %s into a short there", quantity.Text(current))
+	f.Because += fmt.Sprintf("; the supply drives %s through 2 kΩ there", quantity.Text(current))
 	return f.Most(rule.Of(current), rule.Of(limits.TouchCurrent), 0)
 }

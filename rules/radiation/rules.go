@@ -4,6 +4,7 @@ package radiation
 
 import (
 	"fmt"
+	"slices"
 
 	"kilovet/hv/chain"
 	"kilovet/hv/lack"
@@ -49,6 +50,13 @@ var ports = rule.Rule{
 			return one(f.Lacking(lack.Because(fmt.Sprintf("electrons can reach %s; it is not stated that every port and window has its own [[shield]]", quantity.Text(reached)),
 				"access.ports_described", "shield")))
 		}
+		if t := unshielded(e.Chain()); t != nil {
+			f.Place = t.Here()
+			return one(f.Lacking(lack.Because(fmt.Sprintf("no [[shield]] stands before the target %s", t.Name.V), "shield")))
+		}
+		if err := stopped(e); err != nil {
+			return one(f.Lacking(err))
+		}
 		f.Place = access.PortsDescribed.Place
 		f.Because = fmt.Sprintf("electrons can reach %s; %d walls, ports and windows are described as all there are", quantity.Text(reached), len(e.Chain().Shields))
 		return one(f.There(true))
@@ -83,11 +91,39 @@ var shield = rule.Rule{
 	},
 }
 
+// unshielded is the first target without a shield of its own.
+func unshielded(c *chain.Chain) *chain.Target {
+	for i := range c.Targets {
+		if !slices.ContainsFunc(c.Shields, func(s chain.Shield) bool { return s.Target.V == c.Targets[i].Name.V }) {
+			return &c.Targets[i]
+		}
+	}
+	return nil
+}
+
+// stopped is a lack where the targets stop less current than the gun emits: the rest
+// stops where nothing is described.
+func stopped(e *evidence.Evidence) error {
+	emission, err := e.Emission()
+	if err != nil {
+		return err
+	}
+	var sum quantity.Current
+	for _, t := range e.Chain().Targets {
+		sum += t.Current.V
+	}
+	if !quantity.AtLeast(sum, emission) {
+		return lack.Because(fmt.Sprintf("the targets stop %s of the %s emitted", quantity.Text(sum), quantity.Text(emission)), "target.current")
+	}
+	return nil
+}
+
 // energetic is the voltage electrons can reach; not ok where the rule is answered by
 // the judgement beside it.
 func energetic(e *evidence.Evidence, f *rule.Finding) (quantity.Voltage, rule.Judgement, bool) {
-	if !e.HasSupply() || !e.Chain().HasCathode() {
-		return 0, rule.Over("no cathode is described"), false
+	c := e.Chain()
+	if !e.HasSupply() || !c.HasCathode() && len(c.Targets) == 0 && len(c.Shields) == 0 && c.Vacuum == nil {
+		return 0, rule.Over("neither a cathode nor a vessel is described"), false
 	}
 	most, err := e.Accelerating()
 	if err != nil {

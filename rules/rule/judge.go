@@ -1,12 +1,11 @@
 package rule
 
 import (
+	"math"
+
 	"kilovet/hv/lack"
 	"kilovet/hv/quantity"
 )
-
-// margins of a verdict are a hair wider than arithmetic differences between machines.
-const slack = 1e-9
 
 // Least judges provided ≥ needed, marginal where provided < needed·(1 + margin).
 func (f Finding) Least(provided, needed Amount, margin float64) Finding {
@@ -32,14 +31,17 @@ func ratio(a, b float64) float64 {
 }
 
 func (f Finding) judged(provided, needed Amount, m, margin float64) Finding {
+	if math.IsNaN(m) || math.IsInf(m, 0) || provided.Value < 0 {
+		return f.Lacking(lack.Failed("%s and %s cannot be compared", provided.Text(), needed.Text()))
+	}
 	f.Provided, f.Needed, f.Margin = &provided, &needed, &m
 	switch {
-	case m < -slack:
-		f.Verdict = Fails
-	case m < margin-slack:
+	case quantity.AtLeast(1+m, 1+margin):
+		f.Verdict = Meets
+	case quantity.AtLeast(1+m, 1):
 		f.Verdict = Marginal
 	default:
-		f.Verdict = Meets
+		f.Verdict = Fails
 	}
 	return f.tempered()
 }
@@ -64,16 +66,18 @@ func (f Finding) tempered() Finding {
 
 // Lacking turns the reason why there is no number into a verdict.
 func (f Finding) Lacking(err error) Finding {
-	f.Verdict, f.Because = Unassessed, err.Error()
+	f.Verdict = Unassessed
+	if f.Because != "" {
+		f.Because += "; "
+	}
+	f.Because += err.Error()
 	if f.Relation == "" {
 		f.Relation = Presence
 	}
 	if l := lack.Of(err); l != nil {
 		f.Missing = l.Keys
 	}
-	if f.Remedy == "" {
-		f.Remedy = remedy(f.Missing)
-	}
+	f.Remedy = remedy(f.Missing)
 	return f
 }
 

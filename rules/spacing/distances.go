@@ -80,7 +80,11 @@ func distance(e *evidence.Evidence, s *chain.Spacing, id string, given document.
 	if need.Lack != nil {
 		return f.Lacking(need.Lack)
 	}
-	f.Under, f.Sources = x.Under.Text(), append(sources(need.Sources), shown(need.Answer)...)
+	f.Under = x.Under.Text()
+	if id == "spacing.creepage" {
+		f.Under = x.Lasting.Text()
+	}
+	f.Sources = append(sources(need.Sources), shown(need.Answer)...)
 	f.Because = fmt.Sprintf("%s peak, %s lasting: %s", quantity.Text(x.Voltages.Peak), quantity.Text(x.Voltages.LongTerm), need.Because)
 	f.Remedy = fmt.Sprintf("widen it to %s or more, or lower the voltage", quantity.Text(need.Value))
 	if !given.Set() {

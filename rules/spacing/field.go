@@ -77,6 +77,9 @@ func judgeElectrode(e *evidence.Evidence, f *chain.Field, electrode string, find
 	finding.Under = under.Text()
 	finding.Because = fmt.Sprintf("%s at r %s, z %s, good to %s", quantity.Text(p.Strength), quantity.Text(p.At.R), quantity.Text(p.At.Z), quantity.Text(p.Error))
 	finding.Remedy = "round the electrode, widen the gap, or lower the voltage"
+	if !f.Medium.Set() {
+		finding = finding.Assume("what fills " + f.Name.V + " is not given and taken as vacuum")
+	}
 	switch f.Medium.Or("vacuum") {
 	case "vacuum":
 		finding.Sources = []rule.Source{emissionSource, comfortSource}

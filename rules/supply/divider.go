@@ -14,13 +14,16 @@ var clampSource = rule.Source{Text: "a gas tube or Zener across the lower arm, s
 
 var dividerClamp = rule.Rule{
 	ID: "divider.clamp", Title: "Clamp of the divider's tap",
-	Demands: "A permanent clamp limits the tap of the divider should the lower arm open.",
+	Demands: "A clamp holds the tap of the divider at 120 V or less should the lower arm open.",
 	Applies: "Where an open lower arm would lift the tap above 60 V.",
 	Concern: rule.Life,
 	Sources: []rule.Source{clampSource},
 	Example: rule.Example{
-		Swaps:   []rule.Swap{{Was: `clamp  = { voltage = "90 V", kind = "gas tube", leakage = "1 nA" }`, Becomes: ""}},
-		Changes: []rule.Change{{Rule: "divider.clamp", Subject: "divider.tap", Verdict: rule.Fails}},
+		Swaps: []rule.Swap{{Was: `clamp  = { voltage = "90 V", kind = "gas tube", leakage = "1 nA" }`, Becomes: ""}},
+		Changes: []rule.Change{
+			{Rule: "divider.clamp", Subject: "divider.tap", Verdict: rule.Fails},
+			{Rule: "gap.strikes", Subject: "divider.clamp"},
+		},
 	},
 	Judge: func(e *evidence.Evidence) rule.Judgement {
 		d := e.Chain().Divider
@@ -37,12 +40,14 @@ var dividerClamp = rule.Rule{
 		}
 		f.Under = open.Under.Text()
 		f.Because = fmt.Sprintf("with the lower arm open and the meter unplugged the tap rises to %s", quantity.Text(open.Value))
-		f.Remedy = "fit a gas tube or Zener diode from the tap to ground, at the divider itself"
-		if d.Clamp != nil {
-			f.Place = d.Clamp.Here()
-			f.Because += fmt.Sprintf("; the clamp holds it at %s", quantity.Text(d.Clamp.Voltage.V))
+		f.Remedy = "fit a gas tube or Zener diode from the tap to ground, at the divider itself, that holds it at 120 V or less"
+		if d.Clamp == nil {
+			return one(f.There(false))
 		}
-		return one(f.There(d.Clamp != nil).WithoutRemedyIfMet())
+		f.Place, f.Sources = d.Clamp.Here(), append(f.Sources, limits.TouchFaultSource)
+		held := min(open.Value, d.Clamp.Voltage.V)
+		f.Because += fmt.Sprintf("; the clamp holds it at %s", quantity.Text(held))
+		return one(f.Most(rule.Of(held), rule.Of(limits.FaultVoltage), 0).WithoutRemedyIfMet())
 	},
 }
 

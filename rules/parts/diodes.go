@@ -53,3 +53,24 @@ var diodeCurrent = rule.Rule{
 }
 
 func hasDiodePart(el circuit.Element) bool { return el.DiodePart != nil }
+
+var diodeSurge = rule.Rule{
+	ID: "diode.surge_current", Title: "Diode current in an arc",
+	Demands: "The peak current that an arc at the gun drives through a diode stays at or below its single-pulse rating.",
+	Applies: "Every diode of the multiplier, regulation lost.",
+	Margin:  "marginal above 70 % of the rating",
+	Concern: rule.Equipment,
+	Sources: []rule.Source{limits.DiodeSurge.Source},
+	Example: rule.Example{
+		Swaps:   []rule.Swap{{Was: `surge_current = "3 A"`, Becomes: `surge_current = "50 mA"`}},
+		Changes: []rule.Change{{Rule: "diode.surge_current", Subject: "multiplier.diode", Verdict: rule.Fails}},
+	},
+	Judge: func(e *evidence.Evidence) rule.Judgement {
+		return each(groups(e, hasDiodePart), "no multiplier diode is described", func(g group) rule.Finding {
+			rated := g.elements[0].DiodePart.SurgeCurrent
+			r := rating[quantity.Current]{what: "arc current", rated: rated.V, given: rated.Set(), key: rated.Key,
+				derating: limits.DiodeSurge, conditions: []evidence.Condition{{State: evidence.Lost}}, stress: (*evidence.Evidence).ArcDiodePeak}
+			return r.judge(e, g, about("diode.surge_current", rule.Equipment, g, rated.Place))
+		})
+	},
+}

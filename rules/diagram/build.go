@@ -7,6 +7,7 @@ import (
 
 	"kilovet/hv/chain"
 	"kilovet/hv/circuit"
+	"kilovet/hv/quantity"
 	"kilovet/rules/evidence"
 	"kilovet/rules/rule"
 )
@@ -63,7 +64,7 @@ func (b *builder) node(name string) Node {
 		b.unknown = cmp.Or(b.unknown, err.Error())
 		return Node{Name: name}
 	}
-	return Node{Name: name, Potential: text(v)}
+	return Node{Name: name, Potential: quantity.Text(v)}
 }
 
 func (b *builder) ladder() Ladder {

@@ -10,9 +10,6 @@ import (
 	"kilovet/hv/quantity"
 )
 
-// text writes a quantity with the sign of ohms.
-func text[Q quantity.Number](q Q) string { return strings.ReplaceAll(quantity.Text(q), "ohm", "Ω") }
-
 // kind is what an element is drawn as.
 func (b *builder) kind(el *circuit.Element) Kind {
 	switch el.Kind {
@@ -78,9 +75,9 @@ func (b *builder) limiter(el *circuit.Element) Kind {
 func (b *builder) value(el *circuit.Element) string {
 	switch {
 	case el.Name == "cable":
-		return fmt.Sprintf("%s, %s", text(b.chain.Cable.Length.V), text(el.Capacitance))
+		return fmt.Sprintf("%s, %s", quantity.Text(b.chain.Cable.Length.V), quantity.Text(el.Capacitance))
 	case strings.HasPrefix(el.Name, "drive.source"):
-		return fmt.Sprintf("%s peak, %s", text(b.chain.Drive.Peak.V), text(b.chain.Drive.Frequency.V))
+		return fmt.Sprintf("%s peak, %s", quantity.Text(b.chain.Drive.Peak.V), quantity.Text(b.chain.Drive.Frequency.V))
 	case el.Name == "heater.supply":
 		return strings.Join(given(shown(b.chain.Heater.Voltage), shown(b.chain.Heater.Current)), ", ")
 	case el.Name == "heater.feed":
@@ -98,17 +95,17 @@ func (b *builder) value(el *circuit.Element) string {
 func plain(el *circuit.Element) string {
 	switch el.Kind {
 	case circuit.Resistor:
-		return text(el.Resistance)
+		return quantity.Text(el.Resistance)
 	case circuit.Capacitor:
-		return text(el.Capacitance)
+		return quantity.Text(el.Capacitance)
 	case circuit.Inductor:
-		return text(el.Inductance)
+		return quantity.Text(el.Inductance)
 	case circuit.Sink:
-		return text(el.Current)
+		return quantity.Text(el.Current)
 	case circuit.Source:
-		return text(max(el.Wave.Amplitude, -el.Wave.Amplitude))
+		return quantity.Text(max(el.Wave.Amplitude, -el.Wave.Amplitude))
 	case circuit.Gap:
-		return text(el.Strikes)
+		return quantity.Text(el.Strikes)
 	}
 	return ""
 }
@@ -116,7 +113,7 @@ func plain(el *circuit.Element) string {
 // elements says how a resistor is made up: "4 × 500 MΩ, 2 strings".
 func elements(r *chain.Resistor) string {
 	count, strings := r.Elements()
-	value := text(r.Value.V)
+	value := quantity.Text(r.Value.V)
 	if count > 1 {
 		value = fmt.Sprintf("%d × %s", count, value)
 	}
@@ -140,14 +137,14 @@ func (b *builder) emission() string {
 	if err != nil {
 		return ""
 	}
-	return text(i)
+	return quantity.Text(i)
 }
 
 func shown[Q quantity.Number](g document.Given[Q]) string {
 	if !g.Set() {
 		return ""
 	}
-	return text(g.V)
+	return quantity.Text(g.V)
 }
 
 // given keeps the texts that are there.

@@ -1,0 +1,132 @@
+package drawing
+
+import (
+	"bytes"
+	"fmt"
+	"html"
+	"math"
+	"strconv"
+	"strings"
+
+	xfont "golang.org/x/image/font"
+	"gonum.org/v1/plot/vg"
+)
+
+// SVG writes the picture as one svg element, to stand in a page or, as it is, in a
+// file. Ink is the current colour of the page; what is paper has the class "paper", so
+// that a page can give it its own. It holds no style attributes, which a strict
+// content security policy would refuse. Title and description are for those who do
+// not see it; id makes their names unique in the page.
+func (p *Picture) SVG(id, title, description string) []byte {
+	w := &svgWriter{height: p.Height, corner: p.corner}
+	fmt.Fprintf(w, `<svg xmlns="http://www.w3.org/2000/svg" viewBox="0 0 %s %s" role="img" aria-labelledby="%s-title %s-description">`,
+		decimal(p.Width), decimal(p.Height), id, id)
+	fmt.Fprintf(w, "\n<title id=\"%s-title\">%s</title>\n<desc id=\"%s-description\">%s</desc>\n", id, escaped(title), id, escaped(description))
+	w.WriteString(`<g fill="none" stroke="currentColor" stroke-linecap="round" stroke-linejoin="round" font-family="DejaVu Sans, Verdana, sans-serif">` + "\n")
+	for _, s := range p.shapes {
+		w.shape(s)
+	}
+	w.WriteString("</g>\n</svg>\n")
+	return w.Bytes()
+}
+
+func escaped(text string) string { return html.EscapeString(clean(text)) }
+
+type svgWriter struct {
+	bytes.Buffer
+	height vg.Length
+	corner vg.Point
+}
+
+func (w *svgWriter) shape(s shape) {
+	switch {
+	case s.text != "":
+		w.text(s)
+	case s.width == 0:
+		fmt.Fprintf(w, "<path d=\"%s\"%s/>\n", w.data(s.path), paint(s))
+	default:
+		fmt.Fprintf(w, "<path d=\"%s\" stroke-width=\"%s\"%s/>\n", w.data(s.path), decimal(s.width), dashes(s.dash))
+	}
+}
+
+// paint fills a shape or text.
+func paint(s shape) string {
+	if s.ink == paper {
+		return ` class="paper" fill="#fff" stroke="none"`
+	}
+	return ` fill="currentColor" stroke="none"`
+}
+
+func dashes(dash []vg.Length) string {
+	if dash == nil {
+		return ""
+	}
+	parts := make([]string, len(dash))
+	for i, d := range dash {
+		parts[i] = decimal(d)
+	}
+	return ` stroke-dasharray="` + strings.Join(parts, " ") + `" stroke-linecap="butt"`
+}
+
+// text is held to the width it was laid out with, whatever font shows it.
+func (w *svgWriter) text(s shape) {
+	weight := ""
+	if s.face.Font.Weight == xfont.WeightBold {
+		weight = ` font-weight="bold"`
+	}
+	fmt.Fprintf(w, "<text %s font-size=\"%s\" textLength=\"%s\" lengthAdjust=\"spacingAndGlyphs\"%s%s>%s</text>\n",
+		w.place("x=\"%s\" y=\"%s\"", s.at), decimal(s.face.Font.Size), decimal(s.face.Width(s.text)), weight, paint(s), escaped(s.text))
+}
+
+// place writes a point with the picture's upper left corner as its origin.
+func (w *svgWriter) place(format string, p vg.Point) string {
+	p = p.Sub(w.corner)
+	return fmt.Sprintf(format, decimal(p.X), decimal(w.height-p.Y))
+}
+
+// data is the path in SVG's own terms.
+func (w *svgWriter) data(path vg.Path) string {
+	var d strings.Builder
+	for _, c := range path {
+		switch c.Type {
+		case vg.MoveComp:
+			d.WriteString(w.place("M%s %s", c.Pos))
+		case vg.LineComp:
+			d.WriteString(w.place("L%s %s", c.Pos))
+		case vg.ArcComp:
+			w.arc(&d, c)
+		case vg.CurveComp:
+			d.WriteString(map[int]string{1: "Q", 2: "C"}[len(c.Control)])
+			for _, p := range c.Control {
+				d.WriteString(w.place("%s %s ", p))
+			}
+			d.WriteString(w.place("%s %s", c.Pos))
+		case vg.CloseComp:
+			d.WriteString("Z")
+		}
+	}
+	return d.String()
+}
+
+// arc draws an arc in two halves, since SVG knows none that ends where it began.
+func (w *svgWriter) arc(d *strings.Builder, c vg.PathComp) {
+	sweep := 0 // of angles that grow upwards, while SVG's grow downwards
+	if c.Angle < 0 {
+		sweep = 1
+	}
+	for _, share := range []float64{0.5, 1} {
+		angle := c.Start + c.Angle*share
+		end := c.Pos.Add(vg.Point{X: c.Radius * vg.Length(math.Cos(angle)), Y: c.Radius * vg.Length(math.Sin(angle))})
+		fmt.Fprintf(d, "A%s %s 0 0 %d %s", decimal(c.Radius), decimal(c.Radius), sweep, w.place("%s %s", end))
+	}
+}
+
+// decimal writes a length in millimetres to a hundredth.
+func decimal(l vg.Length) string {
+	text := strconv.FormatFloat(millimetres(l), 'f', 2, 64)
+	text = strings.TrimRight(strings.TrimRight(text, "0"), ".")
+	if text == "-0" {
+		return "0"
+	}
+	return text
+}

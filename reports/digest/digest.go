@@ -32,6 +32,15 @@ func Against(r *rules.Review) []rule.Finding {
 	})
 }
 
+// Narrow is the findings about people and equipment that are met with little in hand
+// or on an assumption, the gravest concern first.
+func Narrow(r *rules.Review) []rule.Finding {
+	marginal := slices.DeleteFunc(slices.Clone(r.Findings), func(f rule.Finding) bool {
+		return f.Verdict != rule.Marginal || !slices.Contains(required, f.Concern)
+	})
+	return ordered(marginal, func(a, b rule.Finding) int { return rank(rule.Concerns, a.Concern, b.Concern) })
+}
+
 // Blocks reports whether a verdict stands against switching on.
 func Blocks(v rule.Verdict) bool { return v != rule.Meets && v != rule.Marginal }
 

@@ -176,13 +176,71 @@ func TestNeededAndProvided(t *testing.T) {
 		finding          rule.Finding
 		needed, provided string
 	}{
-		{rule.Finding{Relation: rule.AtLeast, Needed: ten, Provided: two}, "at least 10 V", "2 V"},
-		{rule.Finding{Relation: rule.AtMost, Needed: ten, Provided: two}, "at most 10 V", "2 V"},
-		{rule.Finding{Relation: rule.Presence}, "", ""},
-		{rule.Finding{Relation: rule.AtMost, Needed: ten}, "at most 10 V", ""},
+		{rule.Finding{Relation: rule.AtLeast, Needed: ten, Provided: two}, "needed 10 V", "provided 2 V"},
+		{rule.Finding{Relation: rule.AtMost, Needed: ten, Provided: two}, "allowed 10 V", "found 2 V"},
+		{rule.Finding{Relation: rule.Presence}, "needed ", "provided "},
+		{rule.Finding{Relation: rule.AtMost, Needed: ten}, "allowed 10 V", "found "},
 	} {
-		if n, p := digest.Needed(c.finding), digest.Provided(c.finding); n != c.needed || p != c.provided {
+		needed, provided := digest.Labels(c.finding)
+		if n, p := needed+" "+digest.Needed(c.finding), provided+" "+digest.Provided(c.finding); n != c.needed || p != c.provided {
 			t.Errorf("%v reads %q and %q, want %q and %q", c.finding.Relation, n, p, c.needed, c.provided)
+		}
+	}
+}
+
+func TestNarrowIsWhatPeopleAndEquipmentHaveLittleOf(t *testing.T) {
+	r := &rules.Review{Findings: []rule.Finding{
+		{Rule: "a", Verdict: rule.Marginal, Concern: rule.Equipment},
+		{Rule: "b", Verdict: rule.Fails, Concern: rule.Life},
+		{Rule: "c", Verdict: rule.Marginal, Concern: rule.Performance},
+		{Rule: "d", Verdict: rule.Marginal, Concern: rule.Life},
+		{Rule: "e", Verdict: rule.Meets, Concern: rule.Life},
+	}}
+	if diff := cmp.Diff([]string{"d", "a"}, ids(digest.Narrow(r))); diff != "" {
+		t.Error(diff)
+	}
+}
+
+func TestSilentRowsSayNothingOfAPart(t *testing.T) {
+	for _, c := range []struct {
+		row  digest.Row
+		want bool
+	}{
+		{digest.Row{Subject: "ground", Values: []string{"0 V", "0 V", ""}}, true},
+		{digest.Row{Subject: "gain", Values: []string{"0"}}, true},
+		{digest.Row{Subject: "cathode", Values: []string{"0 V", "0.5 V"}}, false},
+		{digest.Row{Subject: "shield", Values: []string{"below 1e-6 µGy/h"}}, false},
+		{digest.Row{Subject: "whole chain", Values: []string{"0 V"}}, false},
+	} {
+		if got := c.row.Silent(); got != c.want {
+			t.Errorf("%v: %t, want %t", c.row, got, c.want)
+		}
+	}
+}
+
+func TestScopeSaysWhatWasNotJudged(t *testing.T) {
+	of := func(ids ...string) *rules.Review {
+		r := &rules.Review{}
+		for _, id := range ids {
+			r.Findings = append(r.Findings, rule.Finding{Rule: id, Verdict: rule.Meets, Concern: rule.Life})
+		}
+		return r
+	}
+	for _, c := range []struct {
+		review *rules.Review
+		want   string
+	}{
+		{of("spacing.clearance", "field.strength", "spacing.creepage"), "Only spacing, field rules were judged: nothing about people, stored charge or X-rays was."},
+		{of("field.strength"), "Only field rules were judged: nothing about people, stored charge or X-rays was."},
+		{of(""), "Nothing about people, stored charge or X-rays was judged."},
+		{of("spacing.clearance", "touch.voltage"), ""},
+		{of("xray.rate"), ""},
+	} {
+		if got := digest.Scope(c.review); got != c.want {
+			t.Errorf("got %q, want %q", got, c.want)
+		}
+		if got := digest.Sentence(c.review); !strings.HasSuffix(got, strings.TrimSpace("met. "+c.want)) {
+			t.Errorf("the sentence %q does not say so", got)
 		}
 	}
 }
@@ -219,14 +277,15 @@ func TestSentences(t *testing.T) {
 		want     string
 	}{
 		{nil, "Nothing was judged"},
-		{one(rule.Fails, rule.Life), "Do not switch on: 1 finding fails"},
-		{append(one(rule.Fails, rule.Equipment), one(rule.Fails, rule.Life)...), "Do not switch on: 2 findings fail"},
-		{one(rule.Unassessed, rule.Equipment), "Do not switch on yet: 1 finding is unassessed"},
-		{one(rule.Fails, rule.Performance), "Nothing fails on life or equipment; the performance asked for is not reached"},
-		{one(rule.Unassessed, rule.Performance), "Nothing fails on life or equipment; the performance is not fully assessed"},
+		{one(rule.Fails, rule.Life), "Do not switch on: 1 finding about people or equipment fails."},
+		{append(one(rule.Fails, rule.Equipment), one(rule.Fails, rule.Life)...), "Do not switch on: 2 findings about people or equipment fail."},
+		{one(rule.Unassessed, rule.Equipment), "Do not switch on yet: 1 finding about people or equipment is unassessed."},
+		{one(rule.Fails, rule.Performance), "Nothing about people or equipment fails; the performance asked for is not reached"},
+		{one(rule.Unassessed, rule.Performance), "Nothing about people or equipment fails; the performance is not fully assessed"},
+		{one(rule.Marginal, rule.Life), "Every rule that applies is met, some with little in hand or resting on an assumption."},
 		{one(rule.Meets, rule.Life), "Every rule that applies is met."},
 	} {
-		if got := digest.Sentence(&rules.Review{Findings: c.findings}); !strings.HasPrefix(got, c.want) {
+		if got := digest.Sentence(&rules.Review{Findings: c.findings, Verdict: rule.Worst(c.findings)}); !strings.HasPrefix(got, c.want) {
 			t.Errorf("got %q, want %q", got, c.want)
 		}
 	}

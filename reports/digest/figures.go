@@ -3,6 +3,7 @@ package digest
 import (
 	"cmp"
 	"slices"
+	"strings"
 
 	"kilovet/rules/figure"
 	"kilovet/rules/rule"
@@ -31,6 +32,14 @@ func (r Row) Part() string {
 		return ""
 	}
 	return r.Subject
+}
+
+// Silent reports whether the row belongs to a part and says nothing of it but nought,
+// as the potential of ground does.
+func (r Row) Silent() bool {
+	return r.Part() != "" && !slices.ContainsFunc(r.Values, func(v string) bool {
+		return v != "" && v != "0" && !strings.HasPrefix(v, "0 ")
+	})
 }
 
 // States lists the states the figures know, in the order working, cold, lost and

@@ -26,19 +26,22 @@ func Amount(a rule.Amount) string {
 	return a.Text()
 }
 
-// Needed says what a finding needs, as in "at least 125 mm"; empty for a rule of
-// presence and where nothing was assessed.
+// Needed says what a finding needs or allows; empty for a rule of presence and where
+// nothing was assessed.
 func Needed(f rule.Finding) string {
 	if f.Needed == nil {
 		return ""
 	}
-	switch f.Relation {
-	case rule.AtLeast:
-		return "at least " + Amount(*f.Needed)
-	case rule.AtMost:
-		return "at most " + Amount(*f.Needed)
-	}
 	return Amount(*f.Needed)
+}
+
+// Labels are the words before Needed and Provided: a limit from above is allowed, and
+// what there is is found; one from below is needed and provided.
+func Labels(f rule.Finding) (needed, provided string) {
+	if f.Relation == rule.AtMost {
+		return "allowed", "found"
+	}
+	return "needed", "provided"
 }
 
 // Provided says what there is; empty where there is no amount.

@@ -3,28 +3,35 @@ package digest
 import (
 	"fmt"
 	"slices"
+	"strings"
 
 	"kilovet/rules"
 	"kilovet/rules/rule"
 )
 
-// Sentence says in one plain sentence what the verdict asks of people.
+// Sentence says in plain words what the verdict asks of people, and where only a part
+// was judged, that it was.
 func Sentence(r *rules.Review) string {
+	if len(r.Findings) == 0 {
+		return "Nothing was judged: this says nothing about switching on."
+	}
+	return strings.TrimSpace(asked(r) + " " + Scope(r))
+}
+
+func asked(r *rules.Review) string {
 	fails := count(r, rule.Fails, required)
 	open := count(r, rule.Unassessed, required)
 	switch {
-	case len(r.Findings) == 0:
-		return "Nothing was judged: this says nothing about switching on."
 	case fails > 0:
-		return "Do not switch on: " + of(fails, "fails", "fail") + " on life or equipment."
+		return "Do not switch on: " + of(fails, "fails", "fail") + "."
 	case open > 0:
-		return "Do not switch on yet: " + of(open, "is", "are") + " unassessed on life or equipment."
+		return "Do not switch on yet: " + of(open, "is unassessed", "are unassessed") + "."
 	case count(r, rule.Fails, rule.Concerns) > 0:
-		return "Nothing fails on life or equipment; the performance asked for is not reached."
+		return "Nothing about people or equipment fails; the performance asked for is not reached."
 	case count(r, rule.Unassessed, rule.Concerns) > 0:
-		return "Nothing fails on life or equipment; the performance is not fully assessed."
+		return "Nothing about people or equipment fails; the performance is not fully assessed."
 	case r.Verdict == rule.Marginal:
-		return "Every rule that applies is met, some with less than the stated margin."
+		return "Every rule that applies is met, some with little in hand or resting on an assumption."
 	}
 	return "Every rule that applies is met."
 }
@@ -41,7 +48,7 @@ func count(r *rules.Review, v rule.Verdict, concerns []rule.Concern) int {
 
 func of(n int, one, many string) string {
 	if n == 1 {
-		return "1 finding " + one
+		return "1 finding about people or equipment " + one
 	}
-	return fmt.Sprintf("%d findings %s", n, many)
+	return fmt.Sprintf("%d findings about people or equipment %s", n, many)
 }

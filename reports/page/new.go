@@ -11,7 +11,6 @@ import (
 
 // How much of each list the first sheet shows; the rest stands on those after it.
 const (
-	mostAgainst  = 6
 	mostSubjects = 3
 	mostMissing  = 12
 	mostSummary  = 10
@@ -35,6 +34,12 @@ func titleBlock(r *rules.Review) TitleBlock {
 	return TitleBlock{Title: cmp.Or(h.Title, untitled), Document: h.Document, Revision: h.Revision, Owner: h.Owner,
 		Creator: h.Creator, Approver: h.Approver, Date: h.Date, DocumentType: cmp.Or(h.DocumentType, "review before first power-up"),
 		Program: strings.TrimSpace(r.Program.Name + " " + r.Program.Version)}
+}
+
+// Noted is the document with a line above everything on its first sheet.
+func (d *Document) Noted(note string) *Document {
+	d.Sections[0].Lead = note
+	return d
 }
 
 // front is the sheet that answers first: verdict, deference, what the chain is,
@@ -61,26 +66,48 @@ func summary(lines []rules.Line) Facts {
 	return Facts{facts}
 }
 
+// against is what stands against switching on and, after it, what is met with little
+// in hand: as many rows as the sheet holds.
 func against(r *rules.Review) []Block {
-	entries := digest.Entries(digest.Against(r))
-	switch {
-	case len(r.Findings) == 0:
+	if len(r.Findings) == 0 {
 		return nil
-	case len(entries) == 0:
-		return []Block{Paragraph{"No finding stands against switching on."}}
 	}
-	t := Table{Columns: []Column{{Title: "", Share: 0.16}, {Title: "Stands against switching on", Share: 0.34}, {Title: "Why", Share: 0.5}}}
-	for _, e := range entries[:min(len(entries), mostAgainst)] {
-		t.Rows = append(t.Rows, Row{Cells: []Cell{
+	const little = "Met with little in hand or on an assumption"
+	standing, narrow := entryRows(digest.Against(r)), entryRows(digest.Narrow(r))
+	title := "Stands against switching on"
+	var blocks []Block
+	if len(standing) == 0 {
+		blocks, title = append(blocks, Paragraph{"No finding stands against switching on."}), little
+	} else if len(narrow) > 0 {
+		standing = append(standing, Row{Group: true, Cells: []Cell{lines(strong(little))}})
+	}
+	if rows := append(standing, narrow...); len(rows) > 0 {
+		blocks = append(blocks, Table{Columns: []Column{{Title: "", Share: 0.16}, {Title: title, Share: 0.34}, {Title: "Why", Share: 0.5}}, Rows: rows, Fill: true})
+	}
+	return blocks
+}
+
+func entryRows(findings []rule.Finding) []Row {
+	var rows []Row
+	for _, e := range digest.Entries(findings) {
+		rows = append(rows, Row{Cells: []Cell{
 			{Verdict: e.First.Verdict},
 			lines(strong(e.First.Rule), plain(shortened(e.Names(mostSubjects))), small("concerns "+string(e.First.Concern))),
 			lines(plain(shortened(e.First.Because))),
 		}})
 	}
-	if rest := len(entries) - mostAgainst; rest > 0 {
-		t.Rows = append(t.Rows, Row{Group: true, Cells: []Cell{lines(strong("And " + count(rest, "rule") + " more, on the sheets that follow."))}})
+	return rows
+}
+
+// Rest is the row that stands for those of a table from the given one on.
+func (t Table) Rest(from int) Row {
+	n := 0
+	for _, r := range t.Rows[from:] {
+		if !r.Group {
+			n++
+		}
 	}
-	return []Block{t}
+	return Row{Group: true, Cells: []Cell{lines(strong("And " + count(n, "rule") + " more, on the sheets that follow."))}}
 }
 
 func missing(r *rules.Review) []Block {
@@ -98,10 +125,11 @@ func findings(r *rules.Review) []Section {
 	}
 	t := Table{Columns: []Column{{Title: "Verdict", Share: 0.13}, {Title: "Rule and subject", Share: 0.24}, {Title: "Amounts", Share: 0.22}, {Title: "Reason, remedy, sources", Share: 0.41}}}
 	for _, f := range digest.Sorted(r.Findings) {
+		needed, provided := digest.Labels(f)
 		t.Rows = append(t.Rows, Row{Cells: []Cell{
 			{Verdict: f.Verdict},
 			lines(strong(f.Rule), plain(f.Subject), small("concerns "+string(f.Concern)), small(digest.Line(f))),
-			lines(labelled("needed", digest.Needed(f)), labelled("provided", digest.Provided(f)), labelled("margin", digest.Margin(f)), labelledSmall("under", f.Under)),
+			lines(labelled(needed, digest.Needed(f)), labelled(provided, digest.Provided(f)), labelled("margin", digest.Margin(f)), labelledSmall("under", f.Under)),
 			reasons(f),
 		}})
 	}

@@ -20,6 +20,7 @@ type TitleBlock struct {
 
 // Section is a heading and what stands under it.
 type Section struct {
+	Lead   string // stands above the heading
 	Title  string
 	Fresh  bool // begins a sheet
 	Whole  bool // stands on one sheet where it can
@@ -53,6 +54,7 @@ type Fact struct{ Label, Text string }
 type Table struct {
 	Columns []Column
 	Rows    []Row
+	Fill    bool // ends with the sheet it stands on; Rest counts the rows left out
 }
 
 // Column is a title and a share of the width.

@@ -1,23 +1,47 @@
 package page
 
 import (
+	"slices"
+
 	"kilovet/reports/digest"
 	"kilovet/rules"
+	"kilovet/rules/figure"
 	"kilovet/rules/rule"
 )
 
-// figures is the tables of all figures: those that depend on the state, and the
-// others.
+// figures is the tables of the figures: those that depend on the state, and the
+// others. Rows of parts that are nought throughout are left out, and that is said.
 func figures(r *rules.Review) []Section {
 	var sections []Section
 	states := digest.States(r.Figures)
-	if groups := digest.ByState(r.Figures, states); len(groups) > 0 {
+	if groups := telling(digest.ByState(r.Figures, states)); len(groups) > 0 {
 		sections = append(sections, Section{Title: "Figures by state", Fresh: true, Blocks: []Block{figureTable(groups, states)}})
 	}
-	if groups := digest.Stateless(r.Figures); len(groups) > 0 {
+	if groups := telling(digest.Stateless(r.Figures)); len(groups) > 0 {
 		sections = append(sections, Section{Title: "Figures", Fresh: len(sections) == 0, Blocks: []Block{figureTable(groups, []string{"value"})}})
 	}
+	if last := len(sections) - 1; last >= 0 && silent(r.Figures, states) {
+		sections[last].Blocks = append(sections[last].Blocks, Paragraph{"Nodes and parts at which a figure is nought in every state are left out here; the JSON results list them."})
+	}
 	return sections
+}
+
+// telling is the groups without the rows that say nothing.
+func telling(groups []digest.Group) []digest.Group {
+	var kept []digest.Group
+	for _, g := range groups {
+		g.Rows = slices.DeleteFunc(g.Rows, digest.Row.Silent)
+		if len(g.Rows) > 0 {
+			kept = append(kept, g)
+		}
+	}
+	return kept
+}
+
+func silent(figures []figure.Figure, states []string) bool {
+	return slices.ContainsFunc(append(digest.ByState(figures, states), digest.Stateless(figures)...), func(g digest.Group) bool {
+		return slices.ContainsFunc(g.Rows, digest.Row.Silent)
+	})
 }
 
 func figureTable(groups []digest.Group, columns []string) Table {

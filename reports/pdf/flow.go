@@ -70,13 +70,28 @@ func (w *flow) section(s page.Section) {
 		w.turn()
 	}
 	w.gap(7)
-	lines := w.wrap(heading, s.Title, across)
+	lines := append(w.wrap(strong, s.Lead, across), w.wrap(heading, s.Title, across)...)
 	w.room(height(lines) + keep)
 	w.sheet().lines(left, w.y, lines)
 	w.y += height(lines) + 1.5
-	for _, b := range s.Blocks {
+	for i, b := range s.Blocks {
+		if t, ok := b.(page.Table); ok && t.Fill {
+			b = w.filled(t, w.tall(s.Blocks[i+1:]))
+		}
 		w.block(b)
 	}
+}
+
+// tall is the height that blocks take after others on a sheet of their own.
+func (w *flow) tall(blocks []page.Block) float64 {
+	trial := &flow{fonts: w.fonts, sheets: []*sheet{{}}, y: top + 1}
+	for _, b := range blocks {
+		trial.block(b)
+	}
+	if len(trial.sheets) > 1 {
+		return bottom - top
+	}
+	return trial.y - top - 1
 }
 
 // holds reports whether what is left of the sheet takes the section whole.

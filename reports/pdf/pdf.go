@@ -16,8 +16,8 @@ import (
 	"kilovet/reports/page"
 )
 
-// undated stands where the file format wants a moment: sheets hold no clock, their
-// date of issue is an input.
+// undated is a moment for the library, which knows no file without one and else asks
+// the clock; the sheets hold none, their date of issue is an input.
 var undated = time.Date(2000, time.January, 1, 0, 0, 0, 0, time.UTC)
 
 // Render sets the document.
@@ -38,14 +38,34 @@ func Render(d *page.Document) ([]byte, error) {
 	if err := out.Output(&file); err != nil {
 		return nil, fmt.Errorf("pdf: %w", err)
 	}
-	return file.Bytes(), nil
+	return withoutMoment(withoutMoment(file.Bytes(), "CreationDate", issued(d.Block)), "ModDate", undated), nil
+}
+
+// issued is the date of issue where it is written as ISO 8601 has it; else undated.
+func issued(b page.TitleBlock) time.Time {
+	if day, err := time.Parse(time.DateOnly, b.Date); err == nil {
+		return day
+	}
+	return undated
+}
+
+// withoutMoment puts spaces in the place of a moment that is undated, so that the file
+// claims none and every offset in it stays true.
+func withoutMoment(file []byte, key string, moment time.Time) []byte {
+	entry := []byte("/" + key + " (D:" + undated.Format("20060102150405") + ")")
+	at := bytes.LastIndex(file, entry)
+	if !moment.Equal(undated) || at < 0 {
+		return file
+	}
+	copy(file[at:], bytes.Repeat([]byte{' '}, len(entry)))
+	return file
 }
 
 // blank is a file without sheets. The library writes into the fonts it is given.
 func blank(fonts *fonts, block page.TitleBlock) *gofpdf.Fpdf {
 	out := gofpdf.New("P", "mm", "A4", "")
 	out.SetCatalogSort(true)
-	out.SetCreationDate(undated)
+	out.SetCreationDate(issued(block))
 	out.SetModificationDate(undated)
 	out.SetAutoPageBreak(false, 0)
 	out.SetTitle(fonts.guard(regular, block.Title), true)

@@ -17,6 +17,7 @@ import (
 	"kilovet/reports/internal/sample"
 	"kilovet/reports/page"
 	"kilovet/rules"
+	"kilovet/rules/rule"
 )
 
 var samples = map[string]*rules.Review{"failing": sample.Failing(), "sound": sample.Sound(), "empty": sample.Empty(), "hard": sample.Hard(), "nothing": {}}
@@ -180,6 +181,50 @@ func TestFirstSheetAnswers(t *testing.T) {
 		if !strings.Contains(text, want) {
 			t.Errorf("%q is not on the first sheet: %s", want, text)
 		}
+	}
+}
+
+// The first section ends on its sheet, and fills it where there is more to list.
+func TestFirstSectionFillsOneSheet(t *testing.T) {
+	f := testFonts(t)
+	for name, r := range samples {
+		w := &flow{fonts: f}
+		w.turn()
+		w.section(page.New(r).Noted("Built-in example: no file was named").Sections[0])
+		if len(w.sheets) != 1 {
+			t.Errorf("%s: the first section takes %d sheets", name, len(w.sheets))
+		}
+		if got := words(w.sheets[0])[0]; got != "Built-in example: no file was named" {
+			t.Errorf("%s: the sheet begins with %q", name, got)
+		}
+	}
+	r := sample.Failing()
+	for i := range 40 {
+		r.Findings = append(r.Findings, rule.Finding{Rule: fmt.Sprintf("rating.%d", i), Verdict: rule.Fails, Concern: rule.Equipment, Because: "Too little."})
+	}
+	w := &flow{fonts: f}
+	w.turn()
+	w.section(page.New(r).Sections[0])
+	text := strings.Join(words(w.sheets[0]), " ")
+	shown := strings.Count(text, "rating.")
+	if want := fmt.Sprintf("And %d rules more", 43-shown-1); len(w.sheets) != 1 || bottom-w.y > 15 || !strings.Contains(text, want) {
+		t.Errorf("%d sheets, %g mm left, want %q in: %s", len(w.sheets), bottom-w.y, want, text)
+	}
+}
+
+func TestTheFileClaimsNoDateButThatOfIssue(t *testing.T) {
+	const day, made = "2026-03-14", "/CreationDate (D:20260314000000)"
+	d := page.New(sample.Failing())
+	if file := render(t, d); bytes.Contains(file, []byte("Date (D:")) {
+		t.Error("an undated review bears a date")
+	}
+	d.Block.Date = "spring"
+	if file := render(t, d); bytes.Contains(file, []byte("Date (D:")) {
+		t.Error("a date that is none was taken for one")
+	}
+	d.Block.Date = day
+	if file := render(t, d); bytes.Count(file, []byte("Date (D:")) != 1 || !bytes.Contains(file, []byte(made)) {
+		t.Errorf("the date of issue is not %q", made)
 	}
 }
 

@@ -1,6 +1,10 @@
 package pdf
 
-import "kilovet/reports/page"
+import (
+	"slices"
+
+	"kilovet/reports/page"
+)
 
 // gutter is the space between columns, in millimetres.
 const gutter = 2.5
@@ -20,6 +24,29 @@ func (w *flow) table(t page.Table) {
 		w.row(r)
 	}
 	w.y += 1
+}
+
+// filled is the table cut to the rows that the sheet holds beside what follows it, at
+// least one, with a row that counts the others.
+func (w *flow) filled(t page.Table, after float64) page.Table {
+	room := bottom - after - w.y - 4 - headHeight
+	rows := w.tableRows(t, func() {})
+	heights := func(upTo int) (sum float64) {
+		for _, r := range rows[:upTo] {
+			sum += r.height()
+		}
+		return sum
+	}
+	if heights(len(rows)) <= room {
+		return t
+	}
+	rest := w.tableRows(page.Table{Columns: t.Columns, Rows: []page.Row{t.Rest(0)}}, func() {})[0].height()
+	n := len(rows) - 1
+	for n > 1 && (heights(n)+rest > room || t.Rows[n-1].Group) {
+		n--
+	}
+	t.Rows = append(slices.Clone(t.Rows[:n]), t.Rest(n))
+	return t
 }
 
 // headHeight is the most that the titles of the columns take.

@@ -60,11 +60,12 @@ func (w *writer) detail(label, s string) {
 	}
 }
 
-// amounts puts needed, provided, margin and condition into one line.
+// amounts puts what is needed or allowed, what there is, margin and condition into one line.
 func amounts(f rule.Finding) string {
 	var parts []string
+	needed, provided := digest.Labels(f)
 	for _, p := range []struct{ label, text string }{
-		{"needed ", digest.Needed(f)}, {"provided ", digest.Provided(f)}, {"margin ", digest.Margin(f)}, {"under ", f.Under},
+		{needed + " ", digest.Needed(f)}, {provided + " ", digest.Provided(f)}, {"margin ", digest.Margin(f)}, {"under ", f.Under},
 	} {
 		if p.text != "" {
 			parts = append(parts, p.label+p.text)

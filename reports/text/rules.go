@@ -50,7 +50,7 @@ func example(w *writer, e rule.Example) {
 		return
 	}
 	w.blank()
-	w.wrap("For example, in the built-in description")
+	w.wrap("For example, in " + description(e.Of))
 	for _, s := range e.Swaps {
 		w.hang("  was", gutter, oneLine(s.Was))
 		w.hang("  becomes", gutter, oneLine(s.Becomes))
@@ -59,6 +59,15 @@ func example(w *writer, e rule.Example) {
 	for _, c := range e.Changes {
 		w.hang("", 2, change(c))
 	}
+}
+
+// description names the one that an example changes; the empty name is that of the
+// one that is built in.
+func description(name string) string {
+	if name == "" {
+		return "the built-in description, column.toml"
+	}
+	return "the description testdata/chains/" + name + ".toml"
 }
 
 func change(c rule.Change) string {

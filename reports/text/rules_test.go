@@ -30,12 +30,20 @@ func ExampleRule() {
 	// concerns     life
 	// source       IEC 60664-1:2020 Table F.5 (read; governs)
 	//
-	// For example, in the built-in description
+	// For example, in the built-in description, column.toml
 	//   was        creepage = "320 mm"
 	//   becomes    (nothing)
 	// changes
 	//   spacing.creepage, lid: unassessed
 	//   spacing.described, lid: no longer judged
+}
+
+func TestExampleNamesTheDescriptionItChanges(t *testing.T) {
+	other := creepage
+	other.Example.Of = "plate"
+	if out := string(text.Rule(other, text.Options{})); !strings.Contains(out, "in the description testdata/chains/plate.toml\n") {
+		t.Error(out)
+	}
 }
 
 func ExampleRules() {

@@ -15,19 +15,23 @@ import (
 
 // Options say how to write.
 type Options struct {
-	All    bool // everything, after the first screen
-	Colour bool // colour the verdicts
-	Width  int  // columns; 0 means 80, below 40 counts as 40
+	Note   string // stands on the first line, before the title
+	All    bool   // everything, after the first screen
+	Colour bool   // colour the verdicts
+	Width  int    // columns; 0 means 80, below 40 counts as 40
 }
+
+// screen is the lines, of 24 with one for the prompt, that the first screen keeps to
+// where the texts that may not be cut allow it.
+const screen = 23
 
 // How much of each list the first screen shows.
 const (
 	mostSummary  = 8
-	mostAgainst  = 4
+	fewSummary   = 4 // where there is much to list
 	mostSubjects = 3
 	mostMissing  = 6
-
-	mostDeference = 3 // lines
+	leastList    = 4 // lines of what was found, whatever the rest takes
 )
 
 // gutter is the column that labels and verdicts stand in.
@@ -36,41 +40,56 @@ const gutter = 13
 // Render writes the review.
 func Render(r *rules.Review, o Options) []byte {
 	w := newWriter(o)
-	first(w, r)
+	first(w, r, o)
 	if o.All {
 		everything(w, r)
-	} else {
-		w.wrap("Every figure, finding and source: --all. A sheet to sign: --pdf FILE.")
 	}
 	return bytes.Clone(w.out.Bytes())
 }
 
-// first is the one screen.
-func first(w *writer, r *rules.Review) {
+// first is the one screen. What comes before the review, the deference, is never cut:
+// the list of what was found takes the lines that the rest leaves it, and where they
+// are too few the summary gives some up.
+func first(w *writer, r *rules.Review, o Options) {
+	entries := append(digest.Entries(digest.Against(r)), digest.Entries(digest.Narrow(r))...)
+	end := newWriter(o)
+	ending(end, r)
+	room := func(begin *writer) int { return screen - begin.height() - end.height() - 2 }
+	begin := newWriter(o)
+	beginning(begin, r, o.Note, mostSummary)
+	if len(entries) > room(begin) && !o.All {
+		begin = newWriter(o)
+		beginning(begin, r, o.Note, fewSummary)
+	}
+	w.out.Write(begin.out.Bytes())
+	list(w, entries, max(leastList, room(begin)))
+	w.blank()
+	w.out.Write(end.out.Bytes())
+}
+
+// beginning is what the chain is and what the verdict asks.
+func beginning(w *writer, r *rules.Review, note string, most int) {
+	w.hang("", 0, note)
 	heading(w, r.Heading)
-	shown := r.Summary[:min(len(r.Summary), mostSummary)]
+	shown := r.Summary[:min(len(r.Summary), most)]
 	for _, l := range shown {
-		w.short(l.Label, gutter, l.Text, linesEach(len(shown), 6))
+		w.short(l.Label, gutter, l.Text, linesEach(len(r.Summary), 5))
 	}
 	w.blank()
 	w.verdict(strings.ToUpper(string(r.Verdict)), r.Verdict, digest.Sentence(r))
 	w.short("", gutter, digest.Counts(r.Counts), 1)
-	against(w, r)
-	if missing := digest.MissingText(r, mostMissing); missing != "" {
-		w.short("missing", gutter, missing, 2)
-	}
-	w.blank()
-	deferring(w, r.Deference)
 }
 
-// deferring says what comes before the review: in full where all is shown, its
-// beginning on the one screen.
-func deferring(w *writer, s string) {
-	if w.all {
-		w.wrap(s)
-		return
+// ending is what is missing, what comes before the review, and where to read on.
+func ending(w *writer, r *rules.Review) {
+	if missing := digest.MissingText(r, mostMissing); missing != "" {
+		w.short("missing", gutter, missing, 2)
+		w.blank()
 	}
-	w.short("", 0, s, mostDeference)
+	w.wrap(r.Deference)
+	if !w.all {
+		w.wrap("Every figure, finding and source: --all. A sheet to sign: --pdf FILE.")
+	}
 }
 
 // heading is the title and, behind it where the line holds them, number and
@@ -90,25 +109,32 @@ func heading(w *writer, h rules.Heading) {
 		w.short("", 0, title, 1)
 		w.short("", 0, marks, 1)
 	}
-	w.blank()
 }
 
-// against lists what stands against switching on, gravest first.
-func against(w *writer, r *rules.Review) {
-	entries := digest.Entries(digest.Against(r))
+// list tells in so many lines what stands against switching on, gravest first, and
+// after it what is met with little in hand. Where there are lines for every entry,
+// those left over tell the reasons of the first; else each that is shown has its own.
+func list(w *writer, entries []digest.Entry, lines int) {
 	if len(entries) == 0 {
 		return
 	}
 	w.blank()
-	for i, e := range entries {
-		if i == mostAgainst {
-			w.short("", gutter, more(len(entries)-i), 1)
-			break
-		}
-		w.verdict(string(e.First.Verdict), e.First.Verdict, w.fit(string(e.First.Concern)+": "+e.Text(mostSubjects), w.width-gutter))
-		w.short("", gutter, e.First.Because, linesEach(len(entries), 2))
+	shown, spare := len(entries), lines-len(entries)
+	if spare < 0 {
+		shown = (lines - 1) / 2
+		spare = lines - 1 - shown
 	}
-	w.blank()
+	for i, e := range entries[:shown] {
+		w.verdict(string(e.First.Verdict), e.First.Verdict, w.fit(string(e.First.Concern)+": "+e.Text(mostSubjects), w.width-gutter))
+		if spare > 0 {
+			before := w.height()
+			w.short("", gutter, e.First.Because, min(2, max(1, spare-(shown-1-i))))
+			spare -= w.height() - before
+		}
+	}
+	if rest := len(entries) - shown; rest > 0 {
+		w.short("", gutter, more(rest), 1)
+	}
 }
 
 // linesEach keeps the screen one screen: where there are few entries, each is told

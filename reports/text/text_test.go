@@ -2,6 +2,7 @@ package text_test
 
 import (
 	"flag"
+	"fmt"
 	"os"
 	"regexp"
 	"strings"
@@ -15,6 +16,7 @@ import (
 	"kilovet/reports/internal/sample"
 	"kilovet/reports/text"
 	"kilovet/rules"
+	"kilovet/rules/rule"
 )
 
 var update = flag.Bool("update", false, "rewrite the golden files")
@@ -56,7 +58,7 @@ func TestNoLineIsWiderThanAskedFor(t *testing.T) {
 }
 
 func TestTheFirstScreenIsOneScreen(t *testing.T) {
-	for name, most := range map[string]int{"failing": 24, "sound": 24, "empty": 24, "hard": 32} {
+	for name, most := range map[string]int{"failing": 23, "sound": 23, "empty": 23, "hard": 32} {
 		if n := strings.Count(string(text.Render(samples[name], text.Options{})), "\n"); n > most {
 			t.Errorf("%s: %d lines", name, n)
 		}
@@ -130,6 +132,52 @@ func TestColourStandsOnlyBesideWords(t *testing.T) {
 		}
 		if len(r.Findings) > 0 && coloured == plain {
 			t.Errorf("%s: no colour where asked for", name)
+		}
+	}
+}
+
+// The deference may never be cut, whatever stands before it and however narrow the
+// terminal is.
+func TestTheDeferenceStandsWholeOnTheFirstScreen(t *testing.T) {
+	long := strings.Repeat("Local electrical codes and licensed persons come before this review. ", 6)
+	for _, width := range []int{40, 80, 120} {
+		r := sample.Hard()
+		r.Deference = long + "The end."
+		if got := unwrapped(text.Render(r, text.Options{Width: width})); !strings.Contains(got, r.Deference) {
+			t.Errorf("at %d columns: %s", width, got)
+		}
+	}
+}
+
+func TestTheNoteStandsFirst(t *testing.T) {
+	got := string(text.Render(sample.Failing(), text.Options{Note: "Built-in example: no file was named"}))
+	if !strings.HasPrefix(got, "Built-in example: no file was named\nThin-film bench") {
+		t.Error(got)
+	}
+}
+
+// narrow is a review in which n rules are met with little in hand.
+func narrow(n int) *rules.Review {
+	r := sample.Sound()
+	r.Verdict = rule.Marginal
+	r.Summary = append(r.Summary, rules.Line{Label: "energy", Text: "0.4 J"})
+	for i := range n {
+		r.Findings = append(r.Findings, rule.Finding{Rule: fmt.Sprintf("rating.%d", i), Verdict: rule.Marginal, Concern: rule.Equipment, Because: fmt.Sprintf("Reason %d.", i)})
+	}
+	r.Counts = map[rule.Verdict]int{rule.Marginal: n, rule.Meets: 2}
+	return r
+}
+
+func TestLittleInHandIsOnTheFirstScreenAsFarAsItFits(t *testing.T) {
+	for _, n := range []int{1, 4, 6, 30} {
+		out := string(text.Render(narrow(n), text.Options{}))
+		shown := strings.Count(out, "marginal     equipment: rating.")
+		rest := 0
+		if _, after, found := strings.Cut(out, "and "+fmt.Sprint(n-shown)+" rule"); found && after != "" {
+			rest = n - shown
+		}
+		if shown == 0 || shown+rest != n || strings.Count(out, "\n") > 23 || !strings.Contains(out, "Reason 0.") {
+			t.Errorf("%d rules, %d shown, %d counted, %d lines:\n%s", n, shown, rest, strings.Count(out, "\n"), out)
 		}
 	}
 }

@@ -34,6 +34,9 @@ func (w *writer) blank() {
 	}
 }
 
+// height is how many lines stand so far.
+func (w *writer) height() int { return bytes.Count(w.out.Bytes(), []byte("\n")) }
+
 func (w *writer) line(s string) {
 	w.out.WriteString(strings.TrimRight(s, " "))
 	w.out.WriteByte('\n')

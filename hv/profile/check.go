@@ -82,6 +82,9 @@ func along(a, b Segment, tol quantity.Length) bool {
 
 // Closed reports whether the path ends where it began.
 func (p Profile) Closed() bool {
+	if len(p.Segments) == 0 {
+		return false
+	}
 	first, last := p.Segments[0].From, p.Segments[len(p.Segments)-1].To
 	return first.Distance(last) <= 2*sameness*Extent(p)
 }
@@ -90,7 +93,7 @@ func (p Profile) Closed() bool {
 // a closed path is returned as it is. The error, of type Faults, says where an
 // open path ends.
 func (p Profile) ClosedByAxis() (Profile, error) {
-	if p.Closed() {
+	if p.Closed() || len(p.Segments) == 0 {
 		return p, nil
 	}
 	first, last := p.Segments[0].From, p.Segments[len(p.Segments)-1].To

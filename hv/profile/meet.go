@@ -90,18 +90,3 @@ func chord(foot, unit complex128, distance, radius float64, tol quantity.Length)
 func half(distance, radius float64) complex128 {
 	return complex(math.Sqrt(math.Max(0, radius*radius-distance*distance)), 0)
 }
-
-// Crossings are the points two segments have in common; none where they run along
-// each other.
-func (s Segment) Crossings(other Segment) []Point {
-	tol := 1e-12 * (s.Length() + other.Length() + s.Radius() + other.Radius())
-	var found []Point
-	for _, p := range crossings(s, other, 0) {
-		_, da := s.Closest(p)
-		_, db := other.Closest(p)
-		if da <= tol && db <= tol && !near(found, p, tol) {
-			found = append(found, p)
-		}
-	}
-	return found
-}

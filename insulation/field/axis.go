@@ -1,6 +1,7 @@
 package field
 
 import (
+	"cmp"
 	"math"
 	"slices"
 )
@@ -8,7 +9,7 @@ import (
 // lookOnAxis does the same for a node on the axis: spokes to the right of it, by
 // their polar angle.
 func (m *model) lookOnAxis(node int, spokes []spoke) {
-	above, regions := m.besideAxis(spokes)
+	above, right := m.besideAxis(spokes)
 	c := cone{wedge: wedge{start: open}}
 	j := junction{node: node}
 	theta, in := 0.0, above
@@ -25,8 +26,8 @@ func (m *model) lookOnAxis(node int, spokes []spoke) {
 		}
 		c, j = cone{wedge: wedge{start: end}, from: theta}, junction{node: node, metal: end == atConductor}
 	}
-	for i := len(regions) - 1; i >= 0; i-- { // clockwise: from the upper axis down
-		s := regions[i]
+	for i := len(right) - 1; i >= 0; i-- { // clockwise: from the upper axis down
+		s := right[i]
 		angle := math.Pi/2 - s.heading
 		step(angle)
 		if in >= 0 && s.wall >= 0 {
@@ -55,12 +56,7 @@ func (m *model) besideAxis(spokes []spoke) (above int, right []spoke) {
 			right = append(right, s)
 		}
 	}
-	slices.SortFunc(right, func(a, b spoke) int {
-		if a.heading < b.heading {
-			return -1
-		}
-		return 1
-	})
+	slices.SortFunc(right, func(a, b spoke) int { return cmp.Compare(a.heading, b.heading) })
 	if len(right) > 0 {
 		above = right[len(right)-1].beyond
 	}

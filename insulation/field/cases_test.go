@@ -159,10 +159,7 @@ func TestJunctionExponents(t *testing.T) {
 		"d135_chamfer":         {8, 0, "theory_exponent_E(lambda-1)"},
 	} {
 		c := reference(t, id)
-		s, err := Solve(c.arrangement(t))
-		if err != nil {
-			t.Fatal(err)
-		}
+		s := c.solution(t)
 		found := false
 		for _, e := range s.Edges() {
 			if e.At.Distance(*mm([2]float64{at.r, at.z})) < 1e-9 {
@@ -208,10 +205,7 @@ func TestFieldNearJunctionFollowsExponent(t *testing.T) {
 func TestGuns(t *testing.T) {
 	for _, id := range []string{"f1_gun", "f3_gun"} {
 		c := reference(t, id)
-		s, err := Solve(c.arrangement(t))
-		if err != nil {
-			t.Fatal(err)
-		}
+		s := c.solution(t)
 		tip := mm(c.Results.Emax["tip:cap"].At)
 		axial := map[string]float64{}
 		for _, one := range s.Electrodes() {

@@ -27,8 +27,9 @@
 // field go to infinity there is no peak. The exponent comes from the angles and
 // permittivities (wedge.go, cone.go), and the field is read at stated distances.
 //
-// Accuracy, against finite elements and exact solutions in testdata: peaks 1e-4,
-// capacitances 1e-6, single points 1e-3, exponents 1e-6.
+// Accuracy, against the exact solutions in testdata: peaks 2e-4, capacitances 2e-6;
+// against the finite elements there, within their uncertainty: single points 5e-3,
+// 0.05 mm from a junction 1e-2; exponents 1e-6.
 //
 // Sources: Jaswon, Symm, Integral Equation Methods in Potential Theory and
 // Elastostatics (1977), ch. 3, 12, from memory; Durand, Électrostatique I (1964),

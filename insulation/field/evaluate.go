@@ -86,7 +86,9 @@ func (s *solver) sum(v *values, region int, x complex128) (u float64, gradient c
 func (s *solver) effect(v *values, i int, x complex128) (u float64, gradient complex128) {
 	sd := &v.sides[i]
 	add := func(y, along complex128, weight, q, moment, slope float64) {
-		single, double, charge, current := ringEffect(real(x), real(y), x-y, along*1i)
+		g := newRing(real(x), real(y), x-y)
+		single, double := g.potential(along * 1i)
+		charge, current := g.gradient()
 		u += weight * (q*single - sd.orient*moment*double)
 		gradient += complex(weight*q, 0)*charge - complex(sd.orient*weight*slope, 0)*current
 	}
@@ -132,7 +134,8 @@ func (s *solver) ownSlope(p *panel, i int, q *nodal) (sum float64) {
 	for k := range s.self[i] {
 		r := &s.self[i][k]
 		d, _ := p.curve.step(p.start+p.h*(1+s.nodes[i])/2, r.t*p.h/2)
-		charge, _ := ringGradient(real(p.x[i]), real(p.x[i])+real(d), -d)
+		g := newRing(real(p.x[i]), real(p.x[i])+real(d), -d)
+		charge, _ := g.gradient()
 		sum += r.weight * p.h / 2 * r.basis.dot(q) * real(charge*cmplx.Conj(n))
 	}
 	return sum

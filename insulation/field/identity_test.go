@@ -145,10 +145,7 @@ func TestScalingAndMirroring(t *testing.T) {
 }
 
 func TestSuperposition(t *testing.T) {
-	s, err := Solve(reference(t, "f3_gun").arrangement(t))
-	if err != nil {
-		t.Fatal(err)
-	}
+	s := reference(t, "f3_gun").solution(t)
 	whole, err := s.Under(map[string]quantity.Voltage{"control": -950, "tip": -1000, "anode": 120})
 	if err != nil {
 		t.Fatal(err)

@@ -15,7 +15,8 @@ func TestDoubleLayerIsRingCurrents(t *testing.T) {
 	slope := func(s float64) float64 { return 2 * s * (1 - s) * (1 - 2*s) }
 	potential := func(x complex128) (w float64) {
 		for j, y := range p.x {
-			_, d := ringPotential(real(x), real(y), x-y, p.n[j])
+			r := newRing(real(x), real(y), x-y)
+			_, d := r.potential(p.n[j])
 			w += d * moment((1+q.nodes[j])/2) * p.ds[j]
 		}
 		return w
@@ -23,7 +24,8 @@ func TestDoubleLayerIsRingCurrents(t *testing.T) {
 	x := 4.5 + 3i
 	var g complex128
 	for j, y := range p.x {
-		_, current := ringGradient(real(x), real(y), x-y)
+		r := newRing(real(x), real(y), x-y)
+		_, current := r.gradient()
 		g += current * complex(slope((1+q.nodes[j])/2)*p.ds[j], 0)
 	}
 	const h = 1e-4

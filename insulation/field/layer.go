@@ -47,7 +47,8 @@ func (l *layer) block(to, from *panel) *block {
 func (l *layer) row(x complex128, p *panel, factor float64, single, double *nodal) {
 	if cmplx.Abs(x-p.middle) > away*p.h {
 		for j := range order {
-			s, d := ringPotential(real(x), real(p.x[j]), x-p.x[j], p.n[j])
+			g := newRing(real(x), real(p.x[j]), x-p.x[j])
+			s, d := g.potential(p.n[j])
 			single[j] += factor * s * p.ds[j]
 			double[j] += factor * d * p.ds[j]
 		}
@@ -59,7 +60,8 @@ func (l *layer) row(x complex128, p *panel, factor float64, single, double *noda
 // spread adds the potentials at x of the polynomials on a part of a panel close by.
 func (l *layer) spread(x complex128, p *panel, from, to, factor float64, single, double *nodal) {
 	l.part(x, p, from, to, func(y, along complex128, weight float64, t float64) {
-		s, d := ringPotential(real(x), real(y), x-y, along*1i)
+		g := newRing(real(x), real(y), x-y)
+		s, d := g.potential(along * 1i)
 		b := l.basis(t)
 		for j := range order {
 			single[j] += factor * s * weight * b[j]
@@ -83,7 +85,8 @@ func (l *layer) own(i int, p *panel, single, double *nodal) {
 // ownPoint adds a quadrature point at a distance off in t from a node.
 func (l *layer) ownPoint(i int, p *panel, off, weight float64, basis, single, double *nodal) {
 	d, along := p.curve.step(p.start+p.h*(1+l.nodes[i])/2, off*p.h/2)
-	s, m := ringPotential(real(p.x[i]), real(p.x[i])+real(d), -d, along*1i)
+	g := newRing(real(p.x[i]), real(p.x[i])+real(d), -d)
+	s, m := g.potential(along * 1i)
 	w := weight * p.h / 2
 	for j := range order {
 		single[j] += s * w * basis[j]

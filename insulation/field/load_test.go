@@ -5,6 +5,7 @@ import (
 	"fmt"
 	"os"
 	"strings"
+	"sync"
 	"testing"
 
 	"kilovet/hv/profile"
@@ -172,13 +173,26 @@ func (c refCase) potentials(s *Solution) map[string]quantity.Voltage {
 	return out
 }
 
-// solve is the case solved, for its potentials.
-func (c refCase) solve(t testing.TB) *Field {
+// solutions keeps the cases that several tests look at: a solution does not change.
+var solutions sync.Map
+
+func (c refCase) solution(t testing.TB) *Solution {
 	t.Helper()
+	if s, known := solutions.Load(c.ID); known {
+		return s.(*Solution)
+	}
 	s, err := Solve(c.arrangement(t))
 	if err != nil {
 		t.Fatalf("%s: %v", c.ID, err)
 	}
+	solutions.Store(c.ID, s)
+	return s
+}
+
+// solve is the case solved, for its potentials.
+func (c refCase) solve(t testing.TB) *Field {
+	t.Helper()
+	s := c.solution(t)
 	f, err := s.Under(c.potentials(s))
 	if err != nil {
 		t.Fatalf("%s: %v", c.ID, err)

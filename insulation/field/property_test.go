@@ -4,7 +4,6 @@ import (
 	"math"
 	"math/rand/v2"
 	"testing"
-	"time"
 
 	"pgregory.net/rapid"
 
@@ -81,9 +80,9 @@ func bushing(t testing.TB, draw func(low, high float64, label string) float64) A
 // Random bushings are solved; what comes out keeps the laws: C symmetric with rows
 // of nothing, energy from charges, peaks not below the mean field of the gap.
 func TestRandomBushings(t *testing.T) {
-	count := 12
+	count := 8
 	if testing.Short() {
-		count = 4
+		count = 2
 	}
 	for seed := range count {
 		r := rand.New(rand.NewPCG(uint64(seed), 20))
@@ -134,13 +133,12 @@ func FuzzSolve(f *testing.F) {
 	f.Add([]byte("\x01\b(\b\x00\xff\x01<\x00<(\x03\b\x00<\x00\xff\x03\b(<\x04\xf7\\a\xaf\xa0\xfc[("))
 	f.Fuzz(func(t *testing.T, data []byte) {
 		a := arrangementOf(data)
-		begin := time.Now()
 		s, err := Solve(a)
-		if time.Since(begin) > 60*time.Second {
-			t.Fatal("no answer within a minute")
-		}
 		if err != nil {
 			return
+		}
+		if w := s.Work(); w.Factorisations > rounds || w.Unknowns > maxUnknowns || w.Panels > maxPanels {
+			t.Fatalf("work without bound: %+v", w)
 		}
 		v := map[string]quantity.Voltage{}
 		for i, n := range s.Electrodes() {

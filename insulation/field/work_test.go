@@ -26,10 +26,7 @@ func TestWork(t *testing.T) {
 		{"f3_gun", 650, 5},
 	} {
 		ref := reference(t, c.id)
-		s, err := Solve(ref.arrangement(t))
-		if err != nil {
-			t.Fatal(err)
-		}
+		s := ref.solution(t)
 		w := s.Work()
 		if w.Unknowns > c.unknowns || w.Factorisations > c.factorisations || w.Panels*order > w.Unknowns {
 			t.Errorf("%s: %+v", c.id, w)

@@ -21,7 +21,7 @@ func ExampleVessel_Permit() {
 	fmt.Println("freely up to", quantity.Text(p.Free.Value), "because of", p.Free.Because)
 	fmt.Println("none above", quantity.Text(p.Crowded.Value))
 	// Output:
-	// freely up to 4.444e-05 mbar because of 0.001 Torr cm over a path of 300 mm
+	// freely up to 4.444e-5 mbar because of 0.001 Torr cm over a path of 300 mm
 	// none above 0.0004444 mbar
 }
 

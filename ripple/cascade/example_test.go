@@ -47,7 +47,7 @@ func ExampleCascade_Supply() {
 	s, _ := c.Supply()
 	i := s.Into(200e6)
 	fmt.Println(quantity.Text(s.NoLoad), quantity.Text(s.OutputResistance), quantity.Text(i), quantity.Text(s.Voltage(i)))
-	// Output: 23.88 kV 1.864 Mohm 118.3 µA 23.66 kV
+	// Output: 23.88 kV 1.864 MΩ 118.3 µA 23.66 kV
 }
 
 // Amplitudes at the drive frequency and its harmonics, for the filter that follows.

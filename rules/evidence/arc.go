@@ -10,7 +10,7 @@ import (
 // beside it. Assumptions of this review.
 const (
 	arcResistance quantity.Resistance = 1
-	arcPeriods                        = 20 // of the drive
+	arcPeriods    quantity.Time       = 20 // in periods of the drive
 )
 
 // Arc is what an arc from a node to ground does, struck when the node is at its highest,

@@ -7,16 +7,19 @@ import (
 	"errors"
 	"fmt"
 	"io"
+	"io/fs"
 	"os"
 
 	"github.com/spf13/cobra"
 	"golang.org/x/term"
+
+	"kilovet/reports/digest"
 )
 
 func main() {
 	os.Exit(run(world{
 		args: os.Args[1:], in: os.Stdin, out: os.Stdout, err: os.Stderr, env: os.Getenv,
-		columns: func() int { return columns(os.Stdout) },
+		columns: func() int { return columns(os.Stdout) }, piped: piped(os.Stdin),
 	}))
 }
 
@@ -27,6 +30,12 @@ type world struct {
 	out, err io.Writer
 	env      func(string) string
 	columns  func() int // of the terminal that out is; 0 where it is none
+	piped    bool       // something was led into in: a pipe or a file
+}
+
+func piped(in *os.File) bool {
+	info, err := in.Stat()
+	return err == nil && info.Mode()&(fs.ModeCharDevice|fs.ModeDevice|fs.ModeDir) == 0
 }
 
 func columns(out *os.File) int {
@@ -46,6 +55,7 @@ const (
 	unsound  = 1 // something is
 	unusable = 2 // the description or the command line cannot be used
 	files    = 3 // a file could not be read or written
+	failed   = 4 // the program itself failed
 )
 
 // exit ends a command with a status; its words, if any, go to standard error.
@@ -61,8 +71,13 @@ func exitf(status int, format string, args ...any) error {
 }
 
 // run carries out a command line and gives its exit status. What cobra refuses is a
-// command line that cannot be used.
-func run(w world) int {
+// command line that cannot be used; a panic is a defect of the program.
+func run(w world) (status int) {
+	defer func() {
+		if what := recover(); what != nil {
+			status = w.end(defect(what))
+		}
+	}()
 	command := root(w)
 	command.SetArgs(w.args)
 	err := command.ExecuteContext(context.Background())
@@ -73,8 +88,13 @@ func run(w world) int {
 	if !errors.As(err, &e) {
 		e = exit{unusable, err.Error() + "; see kilovet --help"}
 	}
+	return w.end(e)
+}
+
+// end says why a command ended.
+func (w world) end(e exit) int {
 	if e.words != "" {
-		fmt.Fprintln(w.err, "kilovet: "+e.words)
+		fmt.Fprintln(w.err, "kilovet: "+digest.Clean(e.words))
 	}
 	return e.status
 }
@@ -85,7 +105,6 @@ func root(w world) *cobra.Command {
 		Short:         "Reviews a high-voltage supply chain before first power-up",
 		Long:          about,
 		Version:       version(),
-		Args:          cobra.NoArgs,
 		SilenceErrors: true,
 		SilenceUsage:  true,
 		RunE:          func(c *cobra.Command, _ []string) error { return c.Help() },
@@ -95,6 +114,7 @@ func root(w world) *cobra.Command {
 	command.SetOut(w.out)
 	command.SetErr(w.err)
 	command.AddCommand(reviewCommand(w), basisCommand(w), draftCommand(w), schemaCommand(w), compareCommand(w))
+	plainly(command)
 	return command
 }
 
@@ -104,4 +124,5 @@ review and a sheet to sign.
 
 Exit status: 0 nothing fails and nothing is unassessed; 1 something does; 2 the
 description or the command line cannot be used; 3 a file could not be read or
-written. Local electrical codes and licensed practice come first.`
+written; 4 the program itself failed. Local electrical codes and licensed
+practice come first.`

@@ -1,8 +1,10 @@
 package main
 
 import (
+	"bytes"
 	"errors"
 	"fmt"
+	"io"
 	"io/fs"
 	"os"
 	"path/filepath"
@@ -15,13 +17,58 @@ type output struct {
 	data []byte
 }
 
-// replaceAll writes the outputs one after the other, each whole; the first that
-// cannot be written ends it, and the message names those that were.
+// replaceAll writes the outputs one after the other, each whole, once it is clear that
+// none takes the place of something else; the first that cannot be written ends it, and
+// the message names those that were.
 func replaceAll(outputs []output) error {
+	for _, o := range outputs {
+		if err := spares(o.path, kindOf(o.data)); err != nil {
+			return err
+		}
+	}
 	for i, o := range outputs {
 		if err := o.replace(); err != nil {
 			return exitf(files, "%s cannot be written: %v%s", o.path, plain(err), written(outputs[:i]))
 		}
+	}
+	return nil
+}
+
+// kind is what an output is, and how files of it begin.
+type kind struct{ name, begins string }
+
+// The kinds of output.
+var (
+	sheets  = kind{"PDF", "%PDF-"}
+	results = kind{"JSON of kilovet", `{"contract":`}
+)
+
+func kindOf(data []byte) kind {
+	if bytes.HasPrefix(data, []byte(sheets.begins)) {
+		return sheets
+	}
+	return results
+}
+
+// spares refuses an output that has the name of a description, or that would take the
+// place of a file which is not an earlier output of its kind. An empty file, and what is
+// no regular file, holds nothing to lose.
+func spares(path string, k kind) error {
+	if strings.EqualFold(filepath.Ext(path), ".toml") {
+		return exitf(unusable, "%s has the name of a description and is not written; name the %s first and the description last", path, k.name)
+	}
+	info, err := os.Stat(path)
+	if err != nil || !info.Mode().IsRegular() || info.Size() == 0 {
+		return nil // writing says what is wrong, if anything is
+	}
+	file, err := os.Open(path)
+	if err != nil {
+		return exitf(files, "%s cannot be read, and what it holds is not replaced unseen: %v", path, plain(err))
+	}
+	defer file.Close()
+	begin := make([]byte, len(k.begins))
+	if _, err := io.ReadFull(file, begin); err != nil || string(begin) != k.begins {
+		return exitf(unusable, "%s exists and is no %s: it is not replaced; give another name, or remove it first", path, k.name)
 	}
 	return nil
 }

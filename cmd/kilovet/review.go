@@ -38,7 +38,7 @@ func reviewCommand(w world) *cobra.Command {
 	command := &cobra.Command{
 		Use:   "review [CHAIN.toml]",
 		Short: "Review a description: text, a PDF to sign, JSON",
-		Long:  "Review a description. Without a file the built-in example is reviewed; - reads standard input.",
+		Long:  aboutReview,
 		Args:  cobra.MaximumNArgs(1),
 		RunE:  func(_ *cobra.Command, args []string) error { return r.run(args) },
 		ValidArgsFunction: func(*cobra.Command, []string, string) ([]string, cobra.ShellCompDirective) {
@@ -49,27 +49,43 @@ func reviewCommand(w world) *cobra.Command {
 	flags.StringVar(&r.pdf, "pdf", "", "write the sheets to `FILE`")
 	flags.StringVar(&r.json, "json", "", "write the results as JSON to `FILE`; - is standard output, without the text")
 	flags.BoolVar(&r.all, "all", false, "show every figure, finding and source")
-	flags.StringSliceVar(&r.require, "require", words(rule.Concerns), "`CONCERNS` that the exit status depends on")
+	flags.StringSliceVar(&r.require, "require", words(rule.Concerns), "let the exit status depend on these `CONCERNS` only")
 	return command
 }
+
+const aboutReview = `Review a description: what will happen, judged by named rules.
+
+  kilovet review chain.toml                    one screen
+  kilovet review --all chain.toml              every figure, finding and source
+  kilovet review --pdf review.pdf chain.toml   sheets to read, file and sign
+  kilovet review --json - chain.toml           results for other programs
+  kilovet review -                             a description on standard input
+  kilovet review                               the built-in example
+
+Exit status: 0 nothing fails and nothing is unassessed; 1 something does; 2 the
+description or the command line cannot be used, and nothing was written; 3 a
+file could not be read or written; 4 the program itself failed.`
+
+// builtIn stands first on a review that nobody asked for by name.
+const builtIn = "Built-in example: no file was named"
 
 func (r *reviewing) run(args []string) error {
 	concerns, err := required(r.require)
 	if err != nil {
 		return err
 	}
-	given, err := r.input(args)
-	if err != nil {
+	if err := r.writable(args); err != nil {
 		return err
 	}
-	if err := r.distinct(args); err != nil {
+	given, err := r.input(args)
+	if err != nil {
 		return err
 	}
 	review, err := r.review(given)
 	if err != nil {
 		return err
 	}
-	outputs, shown, err := r.render(review)
+	outputs, shown, err := r.render(review, given.note)
 	if err != nil {
 		return err
 	}
@@ -86,6 +102,7 @@ func (r *reviewing) run(args []string) error {
 type source struct {
 	name string
 	data []byte
+	note string // to stand first on the review
 }
 
 // largest is the most that is read of a description: a byte more than one can have,
@@ -94,8 +111,11 @@ const largest = 1<<20 + 1
 
 func (r *reviewing) input(args []string) (source, error) {
 	if len(args) == 0 {
+		if r.piped {
+			fmt.Fprintln(r.err, "kilovet: standard input was not read; to review it: kilovet review -")
+		}
 		name, data := kilovet.Example()
-		return source{name, data}, nil
+		return source{name, data, builtIn}, nil
 	}
 	if args[0] == "-" {
 		return readAll("standard input", r.in)
@@ -113,7 +133,7 @@ func readAll(name string, from io.Reader) (source, error) {
 	if err != nil {
 		return source{}, exitf(files, "%s cannot be read: %v", name, plain(err))
 	}
-	return source{name, data}, nil
+	return source{name: name, data: data}, nil
 }
 
 // review reads the description and runs the rules; faults of the description are
@@ -131,16 +151,16 @@ func (r *reviewing) review(given source) (*rules.Review, error) {
 	return rules.Run(c, inputs, rules.Program{Name: "kilovet", Version: version()}), nil
 }
 
-// render makes every output before any of them is written.
-func (r *reviewing) render(review *rules.Review) (outputs []output, shown []byte, err error) {
+// render makes every output before any of them is written; the note stands first.
+func (r *reviewing) render(review *rules.Review, note string) (outputs []output, shown []byte, err error) {
 	data, err := json.Render(review)
 	if err != nil {
-		return nil, nil, exitf(unsound, "%v: a defect of the program; nothing was written", err)
+		return nil, nil, defect(err)
 	}
 	if r.pdf != "" {
-		sheets, err := pdf.Render(page.New(review))
+		sheets, err := pdf.Render(page.New(review).Noted(note))
 		if err != nil {
-			return nil, nil, exitf(unsound, "%v: a defect of the program; nothing was written", err)
+			return nil, nil, defect(err)
 		}
 		outputs = append(outputs, output{r.pdf, sheets})
 	}
@@ -150,7 +170,9 @@ func (r *reviewing) render(review *rules.Review) (outputs []output, shown []byte
 	if r.json != "" {
 		outputs = append(outputs, output{r.json, data})
 	}
-	return outputs, text.Render(review, r.manner(r.all)), nil
+	how := r.manner(r.all)
+	how.Note = note
+	return outputs, text.Render(review, how), nil
 }
 
 // manner is how text is to be written: colour only on a terminal that does not
@@ -158,6 +180,26 @@ func (r *reviewing) render(review *rules.Review) (outputs []output, shown []byte
 func (w world) manner(all bool) text.Options {
 	columns := w.columns()
 	return text.Options{All: all, Colour: columns > 0 && w.env("NO_COLOR") == "", Width: min(columns, 100)}
+}
+
+// writable refuses outputs before anything is computed: sheets on standard output, and
+// what would take the place of something else.
+func (r *reviewing) writable(args []string) error {
+	if r.pdf == "-" {
+		return exitf(unusable, "sheets are not written to standard output; name a file, as in --pdf review.pdf")
+	}
+	if err := r.distinct(args); err != nil {
+		return err
+	}
+	if r.pdf != "" {
+		if err := spares(r.pdf, sheets); err != nil {
+			return err
+		}
+	}
+	if r.json != "" && r.json != "-" {
+		return spares(r.json, results)
+	}
+	return nil
 }
 
 // distinct refuses outputs that would overwrite each other or the description.

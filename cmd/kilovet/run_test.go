@@ -4,11 +4,13 @@ import (
 	"bytes"
 	_ "embed"
 	"errors"
+	"math"
 	"runtime/debug"
 	"strings"
 	"testing"
 
 	"kilovet/rules"
+	"kilovet/rules/figure"
 	"kilovet/rules/rule"
 )
 
@@ -88,6 +90,37 @@ func TestExitStatusDependsOnTheRequiredConcerns(t *testing.T) {
 	}
 }
 
+// A defect of the program is neither a verdict nor a fault of the user.
+func TestADefectHasAStatusOfItsOwn(t *testing.T) {
+	var errs bytes.Buffer
+	w := world{args: []string{"basis"}, out: &errs, err: &errs, env: func(string) string { return "" }, columns: func() int { panic("out of thought") }}
+	if got := run(w); got != failed || !strings.Contains(errs.String(), "the program itself failed: out of thought (kilovet/cmd/kilovet.TestADefect") {
+		t.Errorf("status %d: %s", got, errs.String())
+	}
+	r := &reviewing{world: w}
+	if _, _, err := r.render(&rules.Review{Figures: []figure.Figure{{ID: "potential", Value: math.NaN()}}}, ""); statusOf(err) != failed {
+		t.Errorf("a figure that is no number: %v", err)
+	}
+}
+
+func TestWhatWasNotReadIsSaid(t *testing.T) {
+	for _, c := range []struct {
+		piped bool
+		args  []string
+		want  bool
+	}{
+		{true, []string{"review", "--json", "-"}, true},
+		{false, []string{"review", "--json", "-"}, false},
+		{true, []string{"review", "--json", "-", "-"}, false},
+	} {
+		var out, errs bytes.Buffer
+		run(world{args: c.args, in: strings.NewReader(gap), out: &out, err: &errs, env: func(string) string { return "" }, columns: func() int { return 0 }, piped: c.piped})
+		if got := strings.Contains(errs.String(), "standard input was not read; to review it: kilovet review -"); got != c.want || out.Len() == 0 {
+			t.Errorf("%v, piped %t: %q", c.args, c.piped, errs.String())
+		}
+	}
+}
+
 func statusOf(err error) int {
 	var e exit
 	if errors.As(err, &e) {
@@ -126,7 +159,7 @@ func FuzzReview(f *testing.F) {
 	f.Add("format = 1\n[[spacing]]\nname = \"a\"\nvoltage = \"2 kV\"\nclearance = \"1 mm\"\n")
 	f.Fuzz(func(t *testing.T, description string) {
 		status, stdout, stderr := try(description, 0, nil, "review", "--json", "-", "-")
-		if status == files || (status == unusable) != (stdout == "") || (status != sound && status != unsound && stderr == "") {
+		if status == files || status == failed || (status == unusable) != (stdout == "") || (status != sound && status != unsound && stderr == "") {
 			t.Errorf("status %d, stdout %q, stderr %q", status, stdout, stderr)
 		}
 	})

@@ -171,6 +171,7 @@ func TestMargins(t *testing.T) {
 }
 
 func TestNeededAndProvided(t *testing.T) {
+	none, strings, tenth := &rule.Amount{Unit: "1"}, &rule.Amount{Value: 2, Unit: "1"}, &rule.Amount{Value: 0.1, Unit: "1"}
 	ten, two := &rule.Amount{Value: 10, Unit: "V"}, &rule.Amount{Value: 2, Unit: "V"}
 	for _, c := range []struct {
 		finding          rule.Finding
@@ -180,6 +181,8 @@ func TestNeededAndProvided(t *testing.T) {
 		{rule.Finding{Relation: rule.AtMost, Needed: ten, Provided: two}, "allowed 10 V", "found 2 V"},
 		{rule.Finding{Relation: rule.Presence}, "needed ", "provided "},
 		{rule.Finding{Relation: rule.AtMost, Needed: ten}, "allowed 10 V", "found "},
+		{rule.Finding{Relation: rule.AtLeast, Needed: strings, Provided: none}, "needed 2", "provided 0"},
+		{rule.Finding{Relation: rule.AtMost, Needed: tenth, Provided: none}, "allowed 10 %", "found 0 %"},
 	} {
 		needed, provided := digest.Labels(c.finding)
 		if n, p := needed+" "+digest.Needed(c.finding), provided+" "+digest.Provided(c.finding); n != c.needed || p != c.provided {

@@ -32,7 +32,7 @@ func Needed(f rule.Finding) string {
 	if f.Needed == nil {
 		return ""
 	}
-	return Amount(*f.Needed)
+	return beside(*f.Needed, f.Provided)
 }
 
 // Labels are the words before Needed and Provided: a limit from above is allowed, and
@@ -49,7 +49,17 @@ func Provided(f rule.Finding) string {
 	if f.Provided == nil {
 		return ""
 	}
-	return Amount(*f.Provided)
+	return beside(*f.Provided, f.Needed)
+}
+
+// beside writes an amount like the other of its pair: of pure numbers that are counted,
+// nought is not a fraction.
+func beside(a rule.Amount, other *rule.Amount) string {
+	finite := !math.IsNaN(a.Value) && !math.IsInf(a.Value, 0)
+	if finite && a.Unit == "1" && other != nil && other.Unit == "1" && math.Abs(other.Value) >= 1 {
+		return quantity.Significant(a.Value)
+	}
+	return Amount(a)
 }
 
 // Margin writes a margin in per cent with its sign; empty where there is none.

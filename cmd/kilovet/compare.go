@@ -98,7 +98,7 @@ func (r reviewed) named() difference.Side {
 func (c *comparing) write(report *difference.Report) error {
 	data, err := difference.JSON(report)
 	if err != nil {
-		return exitf(unsound, "%v: a defect of the program; nothing was written", err)
+		return defect(err)
 	}
 	shown := difference.Text(report, difference.Options{All: c.all, Width: min(c.columns(), 100)})
 	switch c.json {

@@ -8,12 +8,11 @@ import (
 	"kilovet/hv/document"
 	"kilovet/hv/quantity"
 	"kilovet/rules/evidence"
+	"kilovet/rules/limits"
 	"kilovet/rules/rule"
 )
 
 var blurSource = rule.Source{Text: "Barth and Kruit, Optik 101 (1996) 101: sum of FW50 terms", Mark: rule.Memory, Governs: true}
-
-const blurMargin = 0.10
 
 var blur = rule.Rule{
 	ID: "beam.blur", Title: "Blur of the spot",
@@ -38,22 +37,15 @@ var blur = rule.Rule{
 			Under: string(evidence.Working), Sources: []rule.Source{blurSource}, Remedy: "see beam.ripple_allowed: more filtering, or less source width, angle or aberration"}
 		total, err := e.BlurTotal()
 		if err != nil {
-			return one(f.Lacking(err))
+			return rule.One(f.Lacking(err))
 		}
 		f.Because = fmt.Sprintf("the spot is %s of the %s allowed (FW50)", quantity.Text(total), quantity.Text(b.BlurAllowance.V))
-		f = f.Most(rule.Of(total), rule.Of(b.BlurAllowance.V), blurMargin)
-		return one(f.Assume(e.RippleAssumptions()...).WithoutRemedyIfMet())
+		f = f.Most(rule.Of(total), rule.Of(b.BlurAllowance.V), limits.BlurMargin)
+		return rule.One(f.Assume(e.RippleAssumptions()...).WithoutRemedyIfMet())
 	},
 }
 
-func one(f rule.Finding) rule.Judgement { return rule.Judgement{Findings: []rule.Finding{f}} }
-
 var lawSource = rule.Source{Text: "an emission read and an emission computed from the stated law agree within 10 %", Mark: rule.Practice, Governs: true}
-
-const (
-	lawTolerance   = 0.25
-	lawComfortable = 0.10
-)
 
 var emissionLaw = rule.Rule{
 	ID: "gun.emission_law", Title: "Emission against its law",
@@ -75,18 +67,15 @@ var emissionLaw = rule.Rule{
 			Under: string(evidence.Working), Sources: []rule.Source{lawSource}, Remedy: "correct the emission, the cutoff, the scale of the law or the bias resistor"}
 		law, err := e.EmissionByLaw()
 		if err != nil {
-			return one(f.Lacking(err))
+			return rule.One(f.Lacking(err))
 		}
 		apart := quantity.Fraction(math.Abs(float64(law/g.Emission.V) - 1))
 		f.Because = fmt.Sprintf("stated %s, by the law %s", quantity.Text(g.Emission.V), quantity.Text(law))
-		return one(f.Most(rule.Of(apart), rule.Of(quantity.Fraction(lawTolerance)), lawTolerance/lawComfortable-1).WithoutRemedyIfMet())
+		return rule.One(f.Most(rule.Of(apart), rule.Of(limits.LawApart), float64(limits.LawApart/limits.LawComfort)-1).WithoutRemedyIfMet())
 	},
 }
 
 var limitSource = rule.Source{Text: "Richardson's law for the emitting area at its temperature; near it the filament's temperature governs, not the bias", Mark: rule.Derived, Governs: true}
-
-// emissionComfort is the share of the cathode's limit above which its temperature governs.
-const emissionComfort = 0.8
 
 var emissionLimit = rule.Rule{
 	ID: "gun.emission_limit", Title: "Emission against the cathode's limit",
@@ -108,14 +97,14 @@ var emissionLimit = rule.Rule{
 			Under: string(evidence.Working), Sources: []rule.Source{limitSource}, Remedy: "correct emission, area or temperature; a hotter cathode lives shorter"}
 		limit, err := e.RichardsonLimit()
 		if err != nil {
-			return one(f.Lacking(err))
+			return rule.One(f.Lacking(err))
 		}
 		i, err := e.Emission()
 		if err != nil {
-			return one(f.Lacking(err))
+			return rule.One(f.Lacking(err))
 		}
 		f.Because = fmt.Sprintf("%s of the %s that the cathode can give", quantity.Text(i), quantity.Text(limit))
-		return one(f.Most(rule.Of(i), rule.Of(limit), 1/emissionComfort-1).WithoutRemedyIfMet())
+		return rule.One(f.Most(rule.Of(i), rule.Of(limit), 1/limits.EmissionComfort-1).WithoutRemedyIfMet())
 	},
 }
 

@@ -4,14 +4,11 @@ import (
 	"fmt"
 
 	"kilovet/hv/circuit"
-	"kilovet/hv/lack"
 	"kilovet/hv/quantity"
 	"kilovet/rules/evidence"
 	"kilovet/rules/limits"
 	"kilovet/rules/rule"
 )
-
-func missing(key string) error { return lack.Key(key) }
 
 var capacitorVoltage = rule.Rule{
 	ID: "capacitor.voltage", Title: "Capacitor voltage",

@@ -2,6 +2,7 @@ package parts
 
 import (
 	"kilovet/hv/document"
+	"kilovet/hv/lack"
 	"kilovet/hv/quantity"
 	"kilovet/rules/evidence"
 	"kilovet/rules/limits"
@@ -80,7 +81,7 @@ func judgeFeedTest(e *evidence.Evidence, test document.Given[quantity.Voltage]) 
 	f := rule.Finding{Rule: "feed.test_voltage", Subject: "heater.feed", Concern: rule.Life, Place: test.Place,
 		Relation: rule.AtLeast, Sources: []rule.Source{limits.FeedTestSource}, Remedy: "have the feed tested with a higher DC voltage, and state it"}
 	if !test.Set() {
-		return f.Lacking(missing(test.Key))
+		return f.Lacking(lack.Key(test.Key))
 	}
 	most, err := evidence.Largest(e, evidence.Ratings(), []string{"heater.feed"}, func(e *evidence.Evidence, _ string) (quantity.Voltage, error) { return e.Between("cathode", "mains") })
 	if err != nil {
@@ -88,6 +89,5 @@ func judgeFeedTest(e *evidence.Evidence, test document.Given[quantity.Voltage]) 
 	}
 	f.Under = most.Under.Text()
 	f.Because = "the feed stands up to " + quantity.Text(most.Value) + " and was tested with " + quantity.Text(test.V)
-	const comfortable = 1.5
-	return f.Least(rule.Of(test.V), rule.Of(most.Value*limits.FeedTest), comfortable/limits.FeedTest-1).WithoutRemedyIfMet()
+	return f.Least(rule.Of(test.V), rule.Of(most.Value*limits.FeedTest), limits.FeedTestComfort/limits.FeedTest-1).WithoutRemedyIfMet()
 }

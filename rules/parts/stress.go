@@ -4,6 +4,7 @@ import (
 	"fmt"
 
 	"kilovet/hv/document"
+	"kilovet/hv/lack"
 	"kilovet/hv/quantity"
 	"kilovet/rules/evidence"
 	"kilovet/rules/limits"
@@ -30,7 +31,7 @@ func (r rating[Q]) judge(e *evidence.Evidence, g group, f rule.Finding) rule.Fin
 	f.Sources = []rule.Source{r.derating.Source}
 	f.Remedy = fmt.Sprintf("fit a part with a higher rating of %s, or lower the stress", r.what)
 	if !r.given {
-		return f.Lacking(missing(r.key))
+		return f.Lacking(lack.Key(r.key))
 	}
 	most, err := evidence.Largest(e, r.conditions, g.names(), r.stress)
 	if err != nil {

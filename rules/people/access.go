@@ -6,6 +6,7 @@ import (
 
 	"kilovet/hv/chain"
 	"kilovet/hv/document"
+	"kilovet/hv/lack"
 	"kilovet/rules/evidence"
 	"kilovet/rules/limits"
 	"kilovet/rules/rule"
@@ -43,7 +44,7 @@ var enclosure = rule.Rule{
 		}
 		f.Place = access.Enclosure.Place
 		if !access.Enclosure.Set() {
-			return *only(f.Lacking(missing(access.Enclosure.Key)))
+			return *only(f.Lacking(lack.Key(access.Enclosure.Key)))
 		}
 		f.Because = "the enclosure is " + access.Enclosure.V
 		f.Remedy = "close it: interlocked, or opened with a tool only"
@@ -75,7 +76,7 @@ func judgeInterlock(access *chain.Access, f rule.Finding) rule.Finding {
 	f.Place = access.Enclosure.Place
 	lock := access.Interlock
 	if lock == nil {
-		return f.Lacking(missing("access.interlock"))
+		return f.Lacking(lack.Key("access.interlock"))
 	}
 	f.Place = lock.Here()
 	if err := document.Need(lock.Restart, lock.ActsOn); err != nil {
@@ -111,7 +112,7 @@ var bonds = rule.Rule{
 		f := rule.Finding{Rule: "access.earth_bond", Subject: "chain", Concern: rule.Life, Relation: rule.AtMost, Sources: []rule.Source{limits.BondSource, limits.TwoBondsSource}}
 		access := e.Chain().Access
 		if access == nil || access.EarthBond == nil {
-			return *only(f.Lacking(missing("access.earth_bond")))
+			return *only(f.Lacking(lack.Key("access.earth_bond")))
 		}
 		return *only(judgeBonds(access.EarthBond, f))
 	},
@@ -153,7 +154,7 @@ var restart = rule.Rule{
 		f := rule.Finding{Rule: "protection.restart", Subject: "chain", Concern: rule.Life, Relation: rule.Presence, Sources: []rule.Source{limits.RestartSource}}
 		p := e.Chain().Protection
 		if p == nil || !p.Restart.Set() {
-			return *only(f.Lacking(missing("protection.restart")))
+			return *only(f.Lacking(lack.Key("protection.restart")))
 		}
 		f.Place, f.Because, f.Remedy = p.Restart.Place, "restart is "+p.Restart.V, "make restart a deliberate act"
 		return *only(f.There(p.Restart.V == "manual").WithoutRemedyIfMet())

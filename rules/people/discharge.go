@@ -4,6 +4,7 @@ import (
 	"fmt"
 
 	"kilovet/hv/circuit"
+	"kilovet/hv/lack"
 	"kilovet/hv/quantity"
 	"kilovet/rules/evidence"
 	"kilovet/rules/limits"
@@ -27,8 +28,6 @@ var waiting = rule.Rule{
 	Judge: judgeWaiting,
 }
 
-const waitingMargin = 0.25
-
 func judgeWaiting(e *evidence.Evidence) rule.Judgement {
 	f := rule.Finding{Rule: "discharge.waiting_time", Subject: "chain", Concern: rule.Life, Relation: rule.AtLeast,
 		Sources: []rule.Source{limits.DischargeSource, limits.InteriorSource}}
@@ -51,9 +50,9 @@ func judgeWaiting(e *evidence.Evidence) rule.Judgement {
 	f.Because = fmt.Sprintf("%s is the last to fall to 60 V, after %s", slowest.Node, quantity.Text(slowest.Time))
 	if !access.WaitingTime.Set() {
 		f.Because += "; no waiting time is stated"
-		return *only(f.Lacking(missing(access.WaitingTime.Key)))
+		return *only(f.Lacking(lack.Key(access.WaitingTime.Key)))
 	}
-	return *only(f.Least(rule.Of(access.WaitingTime.V), rule.Of(slowest.Time), waitingMargin).WithoutRemedyIfMet())
+	return *only(f.Least(rule.Of(access.WaitingTime.V), rule.Of(slowest.Time), limits.WaitingMargin).WithoutRemedyIfMet())
 }
 
 // slowestOf is the slowest discharge over all states.
@@ -102,7 +101,7 @@ func judgeRedundancy(e *evidence.Evidence) rule.Judgement {
 		f.Place = e.Chain().Bleeders[0].Here()
 	}
 	if !access.WaitingTime.Set() {
-		return *only(f.Lacking(missing(access.WaitingTime.Key)))
+		return *only(f.Lacking(lack.Key(access.WaitingTime.Key)))
 	}
 	good, all, err := countStrings(e, access.WaitingTime.V)
 	if err != nil {

@@ -4,6 +4,7 @@ package people
 
 import (
 	"kilovet/hv/chain"
+	"kilovet/hv/lack"
 	"kilovet/hv/quantity"
 	"kilovet/rules/evidence"
 	"kilovet/rules/limits"
@@ -59,7 +60,7 @@ func needsCare(e *evidence.Evidence, f rule.Finding) (*chain.Access, *rule.Judge
 		return nil, &over
 	}
 	if e.Chain().Access == nil {
-		return nil, only(f.Lacking(missing("access")))
+		return nil, only(f.Lacking(lack.Key("access")))
 	}
 	_, found, err := hazardous(e)
 	if err != nil {

@@ -3,6 +3,7 @@ package people
 import (
 	"fmt"
 
+	"kilovet/hv/lack"
 	"kilovet/hv/quantity"
 	"kilovet/rules/evidence"
 	"kilovet/rules/limits"
@@ -143,7 +144,7 @@ var rodVoltage = rule.Rule{
 		f := rule.Finding{Rule: "rod.voltage", Subject: "earthing rod", Concern: rule.Life, Relation: rule.AtMost, Place: r.RatedVoltage.Place,
 			Sources: []rule.Source{limits.RodSource}, Remedy: "use a rod with a higher voltage rating"}
 		if !r.RatedVoltage.Set() {
-			return *only(f.Lacking(missing(r.RatedVoltage.Key)))
+			return *only(f.Lacking(lack.Key(r.RatedVoltage.Key)))
 		}
 		most, err := evidence.Largest(e, evidence.Ratings(), e.Nodes(), func(e *evidence.Evidence, n string) (quantity.Voltage, error) { return e.Between(n, "ground") })
 		if err != nil {
@@ -181,7 +182,7 @@ var rodEnergy = rule.Rule{
 		f := rule.Finding{Rule: "rod.energy", Subject: "earthing rod", Concern: rule.Life, Relation: rule.AtMost, Place: r.RatedEnergy.Place,
 			Sources: []rule.Source{limits.RodSource}, Remedy: "use a rod with a higher energy rating"}
 		if !r.RatedEnergy.Set() {
-			return *only(f.Lacking(missing(r.RatedEnergy.Key)))
+			return *only(f.Lacking(lack.Key(r.RatedEnergy.Key)))
 		}
 		most, err := evidence.Largest(e, evidence.Ratings(), []string{""}, func(e *evidence.Evidence, _ string) (quantity.Energy, error) { return e.StoredEnergy() })
 		if err != nil {

@@ -11,8 +11,6 @@ import (
 	"kilovet/rules/rule"
 )
 
-func missing(keys ...string) error { return lack.Key(keys...) }
-
 var touch = rule.Rule{
 	ID: "touch.voltage", Title: "Nodes within reach",
 	Demands: "A node that a person or tool can reach is at or below 60 V DC, or limited in current, charge and energy.",
@@ -34,11 +32,11 @@ func judgeTouch(e *evidence.Evidence) rule.Judgement {
 	access := e.Chain().Access
 	if access == nil {
 		f.Subject = "access"
-		return *only(f.Lacking(missing("access.touchable")))
+		return *only(f.Lacking(lack.Key("access.touchable")))
 	}
 	if !access.Touchable.Set() {
 		f.Subject, f.Place = "access", access.Here()
-		return *only(f.Lacking(missing("access.touchable")))
+		return *only(f.Lacking(lack.Key("access.touchable")))
 	}
 	var j rule.Judgement
 	for i, node := range access.Touchable.V {

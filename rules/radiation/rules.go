@@ -9,20 +9,10 @@ import (
 	"kilovet/hv/chain"
 	"kilovet/hv/lack"
 	"kilovet/hv/quantity"
-	"kilovet/hv/xray"
 	"kilovet/rules/evidence"
+	"kilovet/rules/limits"
 	"kilovet/rules/rule"
 )
-
-// harmlessBelow is the voltage up to which apparatus is exempt outright.
-const harmlessBelow quantity.Voltage = 5e3
-
-// permitted is 1 µSv/h at 0.1 m, as air kerma: the dose in tissue is up to 1.74 times
-// the air kerma.
-const permitted quantity.KermaRate = 1e-6 / 3600 / xray.DosePerKerma
-
-// comfort is the factor below the limit within which an estimate is marginal.
-const comfort = 3
 
 var (
 	doseSource   = rule.Source{Text: "1 µSv/h at 0.1 m from an accessible surface (UK Ionising Radiations Regulations 1999, Schedule 1; German X-ray ordinance s. 5)", Mark: rule.Read, Governs: true}
@@ -47,19 +37,19 @@ var ports = rule.Rule{
 		}
 		access := e.Chain().Access
 		if access == nil || !access.PortsDescribed.V || len(e.Chain().Shields) == 0 {
-			return one(f.Lacking(lack.Because(fmt.Sprintf("electrons can reach %s; it is not stated that every port and window has its own [[shield]]", quantity.Text(reached)),
+			return rule.One(f.Lacking(lack.Because(fmt.Sprintf("electrons can reach %s; it is not stated that every port and window has its own [[shield]]", quantity.Text(reached)),
 				"access.ports_described", "shield")))
 		}
 		if t := unshielded(e.Chain()); t != nil {
 			f.Place = t.Here()
-			return one(f.Lacking(lack.Because(fmt.Sprintf("no [[shield]] stands before the target %s", t.Name.V), "shield")))
+			return rule.One(f.Lacking(lack.Because(fmt.Sprintf("no [[shield]] stands before the target %s", t.Name.V), "shield")))
 		}
 		if err := stopped(e); err != nil {
-			return one(f.Lacking(err))
+			return rule.One(f.Lacking(err))
 		}
 		f.Place = access.PortsDescribed.Place
 		f.Because = fmt.Sprintf("electrons can reach %s; %d walls, ports and windows are described as all there are", quantity.Text(reached), len(e.Chain().Shields))
-		return one(f.There(true))
+		return rule.One(f.There(true))
 	},
 }
 
@@ -127,9 +117,9 @@ func energetic(e *evidence.Evidence, f *rule.Finding) (quantity.Voltage, rule.Ju
 	}
 	most, err := e.Accelerating()
 	if err != nil {
-		return 0, one(f.Lacking(err)), false
+		return 0, rule.One(f.Lacking(err)), false
 	}
-	if quantity.AtMost(most.Value, harmlessBelow) {
+	if quantity.AtMost(most.Value, limits.HarmlessBelow) {
 		return 0, rule.Over("electrons cannot reach more than 5 kV"), false
 	}
 	f.Under = most.Under.Text()
@@ -144,10 +134,8 @@ func judgeShield(e *evidence.Evidence, s *chain.Shield, u quantity.Voltage, f ru
 	}
 	f.Because = fmt.Sprintf("at %s the air kerma rate at 0.1 m is estimated at %s, at most %s", quantity.Text(u), quantity.Text(x.Rate), quantity.Text(x.Upper))
 	f.Remedy = "thicken the wall, or use lead; survey before anybody stays near it"
-	return f.Most(rule.Of(x.Upper), rule.Of(permitted), comfort-1).WithoutRemedyIfMet()
+	return f.Most(rule.Of(x.Upper), rule.Of(limits.DoseRate), limits.DoseComfort-1).WithoutRemedyIfMet()
 }
-
-func one(f rule.Finding) rule.Judgement { return rule.Judgement{Findings: []rule.Finding{f}} }
 
 // Rules lists the rules of this family.
 func Rules() []rule.Rule { return []rule.Rule{ports, shield} }

@@ -5,6 +5,7 @@ import (
 
 	"kilovet/hv/lack"
 	"kilovet/hv/quantity"
+	"kilovet/insulation/gap"
 )
 
 // Least judges provided ≥ needed, marginal where provided < needed·(1 + margin).
@@ -31,7 +32,7 @@ func ratio(a, b float64) float64 {
 }
 
 func (f Finding) judged(provided, needed Amount, m, margin float64) Finding {
-	if math.IsNaN(m) || math.IsInf(m, 0) || provided.Value < 0 {
+	if !finite(provided.Value) || !finite(needed.Value) || !finite(m) || provided.Value < 0 {
 		return f.Lacking(lack.Failed("%s and %s cannot be compared", provided.Text(), needed.Text()))
 	}
 	f.Provided, f.Needed, f.Margin = &provided, &needed, &m
@@ -45,6 +46,8 @@ func (f Finding) judged(provided, needed Amount, m, margin float64) Finding {
 	}
 	return f.tempered()
 }
+
+func finite(v float64) bool { return !math.IsNaN(v) && !math.IsInf(v, 0) }
 
 // There judges a presence.
 func (f Finding) There(there bool) Finding {
@@ -136,4 +139,16 @@ func (f Finding) WithoutRemedyIfMet() Finding {
 		f.Remedy = ""
 	}
 	return f
+}
+
+// One is the judgement of a single finding.
+func One(f Finding) Judgement { return Judgement{Findings: []Finding{f}} }
+
+// Cited are the sources of an answer about insulation as those of a finding.
+func Cited(from []gap.Source) []Source {
+	all := make([]Source, len(from))
+	for i, s := range from {
+		all[i] = Source{Text: s.Text, Mark: Mark(s.Mark), Governs: s.Governs}
+	}
+	return all
 }

@@ -9,11 +9,9 @@ import (
 	"kilovet/hv/lack"
 	"kilovet/hv/quantity"
 	"kilovet/rules/evidence"
+	"kilovet/rules/limits"
 	"kilovet/rules/rule"
 )
-
-// aboveThis a node needs a described spacing to ground.
-const aboveThis quantity.Voltage = 1000
 
 var describedSource = rule.Source{Text: "what was not described cannot be judged: every gap above 1 kV is listed before power-up", Mark: rule.Practice, Governs: true}
 
@@ -96,7 +94,7 @@ func toGround(e *evidence.Evidence) ([]pair, error) {
 		if err != nil {
 			return nil, err
 		}
-		if most.Value > aboveThis {
+		if !quantity.AtMost(most.Value, limits.DescribedAbove) {
 			pairs = append(pairs, pair{node, "ground", rule.Life})
 		}
 	}

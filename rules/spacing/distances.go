@@ -9,11 +9,9 @@ import (
 	"kilovet/hv/quantity"
 	"kilovet/insulation/gap"
 	"kilovet/rules/evidence"
+	"kilovet/rules/limits"
 	"kilovet/rules/rule"
 )
-
-// distanceMargin separates meets from marginal for distances.
-const distanceMargin = 0.10
 
 var clearance = rule.Rule{
 	ID: "spacing.clearance", Title: "Clearance",
@@ -84,11 +82,11 @@ func distance(e *evidence.Evidence, s *chain.Spacing, id string, given document.
 	if id == "spacing.creepage" {
 		f.Under = x.Lasting.Text()
 	}
-	f.Sources = append(sources(need.Sources), shown(need.Answer)...)
+	f.Sources = append(rule.Cited(need.Sources), shown(need.Answer)...)
 	f.Because = fmt.Sprintf("%s peak, %s lasting: %s", quantity.Text(x.Voltages.Peak), quantity.Text(x.Voltages.LongTerm), need.Because)
 	f.Remedy = fmt.Sprintf("widen it to %s or more, or lower the voltage", quantity.Text(need.Value))
 	if !given.Set() {
 		return f.Lacking(lack.Key(given.Key))
 	}
-	return f.Least(rule.Of(given.V), rule.Of(need.Value), distanceMargin).Assume(need.Assumptions...).WithoutRemedyIfMet()
+	return f.Least(rule.Of(given.V), rule.Of(need.Value), limits.DistanceMargin).Assume(need.Assumptions...).WithoutRemedyIfMet()
 }

@@ -51,14 +51,6 @@ func concern(s *chain.Spacing) rule.Concern {
 	return rule.Life
 }
 
-func sources(from []gap.Source) []rule.Source {
-	all := make([]rule.Source, len(from))
-	for i, s := range from {
-		all[i] = rule.Source{Text: s.Text, Mark: rule.Mark(s.Mark), Governs: s.Governs}
-	}
-	return all
-}
-
 // shown are the values of other sources, as sources that do not govern.
 func shown[Q quantity.Number](a gap.Answer[Q]) []rule.Source {
 	var all []rule.Source

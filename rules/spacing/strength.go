@@ -6,13 +6,8 @@ import (
 	"kilovet/hv/chain"
 	"kilovet/hv/quantity"
 	"kilovet/rules/evidence"
+	"kilovet/rules/limits"
 	"kilovet/rules/rule"
-)
-
-// Shares of the breakdown estimate that a gap may be used to: common practice.
-const (
-	breakdownFails    = 0.80
-	breakdownMarginal = 0.50
 )
 
 var breakdownSource = rule.Source{Text: "highest voltage at most 80 % of the breakdown estimate, 50 % for comfort", Mark: rule.Practice}
@@ -54,18 +49,14 @@ func judgeBreakdown(e *evidence.Evidence, s *chain.Spacing) rule.Finding {
 		return f.Lacking(stands.Lack)
 	}
 	f.Under = x.Under.Text()
-	f.Sources = append(append(sources(stands.Sources), breakdownSource), shown(stands.Answer)...)
+	f.Sources = append(append(rule.Cited(stands.Sources), breakdownSource), shown(stands.Answer)...)
 	f.Because = fmt.Sprintf("%s across a gap expected to break down at %s (%s)", quantity.Text(x.Voltages.Peak), quantity.Text(stands.Value), stands.Because)
 	f.Remedy = "widen the gap, round its electrodes, or lower the voltage"
-	limit := stands.Value * breakdownFails
-	return f.Most(rule.Of(x.Voltages.Peak), rule.Of(limit), breakdownFails/breakdownMarginal-1).Assume(stands.Assumptions...).WithoutRemedyIfMet()
+	limit := stands.Value * limits.BreakdownShare
+	return f.Most(rule.Of(x.Voltages.Peak), rule.Of(limit), limits.BreakdownShare/limits.BreakdownComfort-1).Assume(stands.Assumptions...).WithoutRemedyIfMet()
 }
 
-// quietBelow is the peak at or below which a gap without shape is free of corona if
-// its clearance meets the table for sharp electrodes.
-const quietBelow quantity.Voltage = 2000
-
-var coronaSource = rule.Source{Text: "highest voltage at most the onset estimate; corona makes ozone, noise and X-ray-like interference, it does not break a gap", Mark: rule.Practice}
+var coronaSource = rule.Source{Text: "highest voltage at most the onset estimate; corona makes ozone, noise and radio interference, it does not break a gap", Mark: rule.Practice}
 
 var corona = rule.Rule{
 	ID: "spacing.corona", Title: "Corona",
@@ -100,10 +91,10 @@ func judgeCorona(e *evidence.Evidence, s *chain.Spacing) (rule.Finding, string) 
 		return f.Lacking(onset.Lack), ""
 	}
 	f.Under = x.Under.Text()
-	f.Sources = append(append(sources(onset.Sources), coronaSource), shown(onset.Answer)...)
+	f.Sources = append(append(rule.Cited(onset.Sources), coronaSource), shown(onset.Answer)...)
 	f.Because = fmt.Sprintf("%s across a gap where discharge is expected from %s (%s)", quantity.Text(x.Voltages.Peak), quantity.Text(onset.Value), onset.Because)
 	f.Remedy = "round the sharper electrode"
-	f = f.Most(rule.Of(x.Voltages.Peak), rule.Of(onset.Value), distanceMargin).Assume(onset.Assumptions...)
+	f = f.Most(rule.Of(x.Voltages.Peak), rule.Of(onset.Value), limits.DistanceMargin).Assume(onset.Assumptions...)
 	if f.Verdict == rule.Fails {
 		f.Verdict = rule.Marginal
 	}
@@ -114,5 +105,5 @@ func judgeCorona(e *evidence.Evidence, s *chain.Spacing) (rule.Finding, string) 
 // the table for sharp electrodes asks.
 func quiet(s *chain.Spacing, x evidence.Spacing) bool {
 	need := x.Assessment.ClearanceNeeded
-	return quantity.AtMost(x.Voltages.Peak, quietBelow) && need.Lack == nil && quantity.AtLeast(s.Clearance.V, need.Value)
+	return quantity.AtMost(x.Voltages.Peak, limits.QuietBelow) && need.Lack == nil && quantity.AtLeast(s.Clearance.V, need.Value)
 }

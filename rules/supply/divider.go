@@ -4,6 +4,7 @@ import (
 	"fmt"
 
 	"kilovet/hv/chain"
+	"kilovet/hv/lack"
 	"kilovet/hv/quantity"
 	"kilovet/rules/evidence"
 	"kilovet/rules/limits"
@@ -33,7 +34,7 @@ var dividerClamp = rule.Rule{
 		f := rule.Finding{Rule: "divider.clamp", Subject: "divider.tap", Concern: rule.Life, Relation: rule.Presence, Place: d.Here(), Sources: []rule.Source{clampSource}}
 		open, err := evidence.Largest(e, evidence.Ratings(), []string{"divider.tap"}, openArm)
 		if err != nil {
-			return one(f.Lacking(err))
+			return rule.One(f.Lacking(err))
 		}
 		if quantity.AtMost(open.Value, limits.TouchVoltage) {
 			return rule.Over("an open lower arm leaves the tap below 60 V")
@@ -42,12 +43,12 @@ var dividerClamp = rule.Rule{
 		f.Because = fmt.Sprintf("with the lower arm open and the meter unplugged the tap rises to %s", quantity.Text(open.Value))
 		f.Remedy = "fit a gas tube or Zener diode from the tap to ground, at the divider itself, that holds it at 120 V or less"
 		if d.Clamp == nil {
-			return one(f.There(false))
+			return rule.One(f.There(false))
 		}
 		f.Place, f.Sources = d.Clamp.Here(), append(f.Sources, limits.TouchFaultSource)
 		held := min(open.Value, d.Clamp.Voltage.V)
 		f.Because += fmt.Sprintf("; the clamp holds it at %s", quantity.Text(held))
-		return one(f.Most(rule.Of(held), rule.Of(limits.FaultVoltage), 0).WithoutRemedyIfMet())
+		return rule.One(f.Most(rule.Of(held), rule.Of(limits.FaultVoltage), 0).WithoutRemedyIfMet())
 	},
 }
 
@@ -69,7 +70,7 @@ var meterRating = rule.Rule{
 		if d == nil || d.Meter == nil {
 			return rule.Over("no meter is described at a divider")
 		}
-		return one(judgeMeter(e, d))
+		return rule.One(judgeMeter(e, d))
 	},
 }
 
@@ -79,7 +80,7 @@ func judgeMeter(e *evidence.Evidence, d *chain.Divider) rule.Finding {
 		Sources: []rule.Source{clampSource}, Remedy: "fit a clamp below the meter's rating, or a meter rated higher"}
 	if !rated.Set() {
 		f.Place = d.Meter.Here()
-		return f.Lacking(missing(rated.Key))
+		return f.Lacking(lack.Key(rated.Key))
 	}
 	most, err := evidence.Largest(e, evidence.Ratings(), []string{"divider.tap"}, func(e *evidence.Evidence, _ string) (quantity.Voltage, error) { return e.MeterWithOpenArm() })
 	if err != nil {
@@ -110,13 +111,11 @@ var errorKnown = rule.Rule{
 			Under: string(e.Condition().State), Sources: []rule.Source{errorSource}, Remedy: "use tighter or more stable resistors, or calibrate the divider"}
 		got, err := e.DividerError()
 		if err != nil {
-			return one(f.Lacking(err))
+			return rule.One(f.Lacking(err))
 		}
 		f.Because = fmt.Sprintf("tolerance, temperature and voltage together: %s, worst case", quantity.Text(got))
-		return one(f.Most(rule.Of(got), rule.Of(quantity.Fraction(mostError)), mostError/comfortableError-1).WithoutRemedyIfMet())
+		return rule.One(f.Most(rule.Of(got), rule.Of(limits.DividerError), float64(limits.DividerError/limits.DividerComfort)-1).WithoutRemedyIfMet())
 	},
 }
-
-const mostError, comfortableError = 0.10, 0.05
 
 var errorSource = rule.Source{Text: "a divider off by more than 10 % cannot prove a set voltage or a safe state", Mark: rule.Practice, Governs: true}

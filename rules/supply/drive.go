@@ -7,12 +7,11 @@ import (
 	"kilovet/hv/lack"
 	"kilovet/hv/quantity"
 	"kilovet/rules/evidence"
+	"kilovet/rules/limits"
 	"kilovet/rules/rule"
 )
 
 var headroomSource = rule.Source{Text: "a regulated drive keeps 5 % in hand at full load", Mark: rule.Practice, Governs: true}
-
-const headroomMargin = 0.05
 
 var headroom = rule.Rule{
 	ID: "drive.headroom", Title: "Headroom of the drive",
@@ -34,15 +33,13 @@ var headroom = rule.Rule{
 			Place: c.Drive.Peak.Place, Under: string(evidence.Working), Sources: []rule.Source{headroomSource}}
 		needed, err := e.PeakNeeded()
 		if err != nil {
-			return one(f.Lacking(err))
+			return rule.One(f.Lacking(err))
 		}
 		f.Because = fmt.Sprintf("%s peak holds %s under load, the drive gives %s", quantity.Text(needed), quantity.Text(c.Regulation.Set.V), quantity.Text(c.Drive.Peak.V))
 		f.Remedy = "raise the drive, add a stage, raise frequency or capacitance, or lower the load"
-		return one(f.Least(rule.Of(c.Drive.Peak.V), rule.Of(needed), headroomMargin).WithoutRemedyIfMet())
+		return rule.One(f.Least(rule.Of(c.Drive.Peak.V), rule.Of(needed), limits.HeadroomMargin).WithoutRemedyIfMet())
 	},
 }
-
-func one(f rule.Finding) rule.Judgement { return rule.Judgement{Findings: []rule.Finding{f}} }
 
 var balanceSource = rule.Source{Text: "at light load a fraction of a per cent of unbalance gives a symmetrical cascade the ripple of a half-wave one (charge balance)", Mark: rule.Derived, Governs: true}
 
@@ -66,9 +63,9 @@ var balance = rule.Rule{
 			Place: c.Drive.Unbalance.Place, Sources: []rule.Source{balanceSource}}
 		if !c.Drive.Unbalance.Set() {
 			f.Place = c.Drive.Here()
-			return one(f.Lacking(lack.Because("the ripple of a symmetrical drive rests on its unbalance, which is not given; it was computed for none", c.Drive.Unbalance.Key)))
+			return rule.One(f.Lacking(lack.Because("the ripple of a symmetrical drive rests on its unbalance, which is not given; it was computed for none", c.Drive.Unbalance.Key)))
 		}
 		f.Because = "the ripple is computed with an unbalance of " + quantity.Text(c.Drive.Unbalance.V)
-		return one(f.There(true))
+		return rule.One(f.There(true))
 	},
 }

@@ -7,7 +7,6 @@ import (
 	"kilovet/hv/document"
 	"kilovet/hv/lack"
 	"kilovet/hv/quantity"
-	"kilovet/insulation/gap"
 	"kilovet/rules/evidence"
 	"kilovet/rules/rule"
 )
@@ -35,32 +34,22 @@ func judgePermit(e *evidence.Evidence) rule.Judgement {
 	}
 	f := rule.Finding{Rule: "vacuum.permit", Subject: "vessel", Concern: rule.Equipment, Relation: rule.AtMost}
 	if c.Vacuum == nil {
-		return one(f.Lacking(lack.Key("vacuum")))
+		return rule.One(f.Lacking(lack.Key("vacuum")))
 	}
 	f.Place = c.Vacuum.PressurePermit.Place
 	if err := document.Need(c.Vacuum.PressurePermit, c.Vacuum.LongestPath); err != nil {
-		return one(f.Lacking(err))
+		return rule.One(f.Lacking(err))
 	}
 	limits, err := e.Vessel().Permit()
 	if err != nil {
-		return one(f.Lacking(err))
+		return rule.One(f.Lacking(err))
 	}
-	f.Sources = append(sources(limits.Crowded.Sources), freeSource)
+	f.Sources = append(rule.Cited(limits.Crowded.Sources), freeSource)
 	f.Because = fmt.Sprintf("permitted below %s; over %s up to %s is free of discharge, none above %s", quantity.Text(c.Vacuum.PressurePermit.V),
 		quantity.Text(c.Vacuum.LongestPath.V), quantity.Text(limits.Free.Value), quantity.Text(limits.Crowded.Value))
 	f.Remedy = "permit high voltage only below " + quantity.Text(limits.Free.Value) + ", or shorten the longest path"
 	margin := float64(limits.Crowded.Value/limits.Free.Value) - 1
-	return one(f.Most(rule.Of(c.Vacuum.PressurePermit.V), rule.Of(limits.Crowded.Value), margin).WithoutRemedyIfMet())
-}
-
-func one(f rule.Finding) rule.Judgement { return rule.Judgement{Findings: []rule.Finding{f}} }
-
-func sources(from []gap.Source) []rule.Source {
-	all := make([]rule.Source, len(from))
-	for i, s := range from {
-		all[i] = rule.Source{Text: s.Text, Mark: rule.Mark(s.Mark), Governs: s.Governs}
-	}
-	return all
+	return rule.One(f.Most(rule.Of(c.Vacuum.PressurePermit.V), rule.Of(limits.Crowded.Value), margin).WithoutRemedyIfMet())
 }
 
 // Rules lists the rules of this family.

@@ -1,0 +1,159 @@
+package main
+
+import (
+	"context"
+	"crypto/sha256"
+	"encoding/hex"
+	"errors"
+	"fmt"
+	"net"
+	"net/http"
+	"os"
+	"os/signal"
+	"path/filepath"
+	"syscall"
+	"time"
+
+	"github.com/spf13/cobra"
+
+	"kilovet/hv/chain"
+	"kilovet/hv/document"
+	"kilovet/reports/html"
+	"kilovet/rules/diagram"
+	"kilovet/rules/evidence"
+)
+
+// showing is a description that is shown while it is written.
+type showing struct {
+	world
+	path string
+	port int
+}
+
+func showCommand(w world) *cobra.Command {
+	s := &showing{world: w}
+	command := &cobra.Command{
+		Use:   "show CHAIN.toml",
+		Short: "Show a description's review in the browser, anew whenever it is saved",
+		Long: `Serve the review of a description as a page to this computer alone. The page
+follows the file: it is made anew whenever the file is saved, and shows faults
+at their lines. It ends with Ctrl+C.`,
+		Args: cobra.ExactArgs(1),
+		RunE: func(c *cobra.Command, args []string) error {
+			s.path = args[0]
+			return s.run(c.Context())
+		},
+		ValidArgsFunction: func(*cobra.Command, []string, string) ([]string, cobra.ShellCompDirective) {
+			return []string{"toml"}, cobra.ShellCompDirectiveFilterFileExt
+		},
+	}
+	command.Flags().IntVar(&s.port, "port", 0, "`PORT` to listen on; 0 takes a free one")
+	return command
+}
+
+// lookEvery is how often the file is looked at.
+const lookEvery = 300 * time.Millisecond
+
+func (s *showing) run(ctx context.Context) error {
+	if s.path == "-" {
+		return exitf(unusable, "what comes on standard input is not saved anew; give a file")
+	}
+	if _, err := s.read(); err != nil {
+		return err
+	}
+	listener, err := net.Listen("tcp4", fmt.Sprintf("127.0.0.1:%d", s.port))
+	if err != nil {
+		return exitf(unusable, "port %d cannot be used: %v", s.port, err)
+	}
+	ctx, stop := signal.NotifyContext(ctx, os.Interrupt, syscall.SIGTERM)
+	defer stop()
+	ticker := time.NewTicker(lookEvery)
+	defer ticker.Stop()
+	return s.serve(ctx, listener, ticker.C)
+}
+
+// serve shows the page until the context ends; it looks at the file on each tick.
+func (s *showing) serve(ctx context.Context, listener net.Listener, ticks <-chan time.Time) error {
+	b := newBoard(listener.Addr().(*net.TCPAddr).Port)
+	seen := &follower{showing: s, board: b}
+	if err := seen.look(); err != nil {
+		return err
+	}
+	server := &http.Server{Handler: b, ReadHeaderTimeout: 5 * time.Second, BaseContext: func(net.Listener) context.Context { return ctx }}
+	ended := make(chan error, 1)
+	go func() { ended <- server.Serve(listener) }()
+	defer server.Close()
+	if err := s.show([]byte(fmt.Sprintf("http://%s/ shows %s; Ctrl+C ends it\n", listener.Addr(), s.path))); err != nil {
+		return err
+	}
+	for {
+		select {
+		case <-ctx.Done():
+			return nil
+		case err := <-ended:
+			return exitf(unusable, "the page is no longer served: %v", err)
+		case <-ticks:
+			if err := seen.look(); err != nil {
+				return err
+			}
+		}
+	}
+}
+
+func (s *showing) read() (source, error) {
+	return (&reviewing{world: s.world}).input([]string{s.path})
+}
+
+// follower puts a new page on the board whenever the file has changed.
+type follower struct {
+	*showing
+	board  *board
+	last   string // version shown
+	missed int    // looks in a row that found no file
+}
+
+// patience is how many looks may find no file before that is shown: editors that
+// replace a file leave it away for a moment.
+const patience = 2
+
+func (f *follower) look() error {
+	given, err := f.read()
+	if err != nil {
+		if f.missed++; f.missed < patience {
+			return nil
+		}
+		given = source{name: f.path, note: err.Error()}
+	} else {
+		f.missed = 0
+	}
+	sum := sha256.Sum256(append(given.data, given.note...))
+	version := hex.EncodeToString(sum[:8])
+	if version == f.last {
+		return nil
+	}
+	page, err := f.page(given, version)
+	if err != nil {
+		return defect(err)
+	}
+	f.last = version
+	f.board.put(page, version)
+	return nil
+}
+
+// page is the review of a description, or its faults; a note says why there is none.
+func (s *showing) page(given source, version string) ([]byte, error) {
+	name, o := filepath.Base(given.name), html.Options{Version: version}
+	if given.note != "" {
+		return html.Faults(name, nil, document.Faults{{Line: 1, Column: 1, What: given.note}}, o)
+	}
+	c, faults := chain.Read(given.data)
+	if len(faults) > 0 {
+		return html.Faults(name, given.data, faults, o)
+	}
+	review, err := (&reviewing{world: s.world}).review(given)
+	if err != nil {
+		return nil, errors.New("a description without faults was refused")
+	}
+	o.Diagram = diagram.Of(evidence.New(c), review.Findings)
+	return html.RenderWith(review, o)
+}

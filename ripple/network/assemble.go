@@ -88,7 +88,6 @@ type system struct {
 	capSine                []float64
 	condDirect, condSquare []float64
 	condSine               []float64
-	local                  []float64
 	inner                  []int // unknowns that hold charge
 	assumptions            []string
 	typical                float64 // the smallest fitted capacitance

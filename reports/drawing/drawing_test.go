@@ -2,6 +2,7 @@ package drawing
 
 import (
 	"flag"
+	"fmt"
 	"math"
 	"os"
 	"slices"
@@ -75,31 +76,39 @@ func (p *Picture) texts() (texts []string, boxes []box) {
 	return texts, boxes
 }
 
-func TestNoTextCoversAnother(t *testing.T) {
-	for name, d := range diagrams(t) {
-		texts, boxes := drawn(t, d).texts()
-		for i := range texts {
-			for j := range i {
-				if boxes[i].touches(boxes[j]) {
-					t.Errorf("%s: %q covers %q", name, texts[i], texts[j])
+// covered lists texts that cover each other.
+func (p *Picture) covered() (flaws []string) {
+	texts, boxes := p.texts()
+	for i := range texts {
+		for j := range i {
+			if boxes[i].touches(boxes[j]) {
+				flaws = append(flaws, fmt.Sprintf("%q covers %q", texts[i], texts[j]))
+			}
+		}
+	}
+	return flaws
+}
+
+// crossed lists texts that a wire crosses.
+func (p *Picture) crossed() (flaws []string) {
+	texts, boxes := p.texts()
+	for _, w := range p.shapes {
+		for i := 1; i < len(w.path); i++ {
+			for j := range texts {
+				if w.width > 0 && w.path[i].Type == vg.LineComp && boxes[j].crossed(w.path[i-1].Pos, w.path[i].Pos) {
+					flaws = append(flaws, fmt.Sprintf("a wire crosses %q", texts[j]))
 				}
 			}
 		}
 	}
+	return flaws
 }
 
-func TestNoWireCrossesAText(t *testing.T) {
+func TestEveryTextCanBeRead(t *testing.T) {
 	for name, d := range diagrams(t) {
 		p := drawn(t, d)
-		texts, boxes := p.texts()
-		for _, w := range p.shapes {
-			for i := 1; i < len(w.path); i++ {
-				for j := range texts {
-					if w.width > 0 && w.path[i].Type == vg.LineComp && boxes[j].crossed(w.path[i-1].Pos, w.path[i].Pos) {
-						t.Errorf("%s: a wire crosses %q", name, texts[j])
-					}
-				}
-			}
+		for _, flaw := range append(p.covered(), p.crossed()...) {
+			t.Errorf("%s: %s", name, flaw)
 		}
 	}
 }

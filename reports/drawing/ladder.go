@@ -2,6 +2,7 @@ package drawing
 
 import (
 	"fmt"
+	"slices"
 
 	"kilovet/rules/diagram"
 )
@@ -72,16 +73,36 @@ type side struct {
 // sides are those of the first and the second column.
 var sides = [2]side{{toLeft, -1}, {toRight, 1}}
 
-// columnDistance leaves room between two columns for the labels that stand there.
+// columnDistance leaves room between two columns for what stands there: the labels of
+// the stages, where the lines part more slowly the farther the columns are, and those
+// of the capacitors before the flags of the diodes.
 func (s *sheet) columnDistance(l diagram.Ladder) float64 {
 	if len(l.Columns) == 1 {
 		return 30
 	}
 	most := 0.0
 	for _, n := range l.Stages {
-		most = max(most, s.inlineWidth(n))
+		most = max(most, 1.13*s.inlineWidth(n)+9)
 	}
-	return 1.13*most + 9 // the lines part more slowly, the farther the columns
+	flags := 0.0
+	for _, d := range slices.Concat(l.Columns[1].Lower, l.Columns[1].Upper) {
+		flags = max(flags, s.flagWidth(s.flagOf(d.Mark, false)))
+	}
+	for _, c := range l.Smoothing {
+		width, _ := s.labelSize(s.smoothingLabel(c))
+		most = max(most, 2*(smoothingRoom+width+1+flags/2-flagLeft))
+	}
+	return most
+}
+
+// Where labels and flags stand beside the smoothing column.
+const (
+	smoothingRoom = 4    // from the column to the label of a capacitor
+	flagLeft      = -2.2 // from the middle of a diode
+)
+
+func (s *sheet) smoothingLabel(p diagram.Part) label {
+	return label{value: p.Value, flag: s.flagOf(p.Mark, false)}
 }
 
 // inlineRoom is the distance of a label in one line from its node, where the lines
@@ -134,7 +155,7 @@ func (s *sheet) smoothing(l diagram.Ladder, st step, from at) {
 	}
 	part := l.Smoothing[st.stage]
 	s.part(&part, to, from)
-	s.beside(from.plus(4, rung/2), toRight, label{value: part.Value, flag: s.flagOf(part.Mark, false)})
+	s.beside(from.plus(smoothingRoom, rung/2), toRight, s.smoothingLabel(part))
 	s.dot(to)
 	if len(l.Columns) > 1 {
 		n := l.Stages[st.stage]
@@ -178,9 +199,9 @@ func (s *sheet) rectifier(d diagram.Part, own string, near, far at) {
 	case near.x < far.x:
 		s.flag(middle.plus(0, 4.6), f)
 	case near.y > far.y: // right of the smoothing column, whose labels stand between the stages
-		s.flag(middle.plus(-2.2, 3.4), f)
+		s.flag(middle.plus(flagLeft, 3.4), f)
 	default:
-		s.flag(middle.plus(-2.2, -3.4), f)
+		s.flag(middle.plus(flagLeft, -3.4), f)
 	}
 }
 

@@ -40,7 +40,7 @@ func (s *sheet) seriesZone(p *diagram.Part) zone {
 	l.flag = pennant{} // below the part
 	width, height := s.labelSize(l)
 	f := s.flagOf(p.Mark, true)
-	width = max(width, s.flagWidth(f), 2*bodies[p.Kind].half) + 2*seriesRoom
+	width = max(width, 2*flagReach(p, s.flagWidth(f)), 2*bodies[p.Kind].half) + 2*seriesRoom
 	return zone{
 		width: width, over: height + 2, under: earthDepth + 4,
 		draw: func(origin at) {
@@ -61,6 +61,9 @@ func flagShift(p *diagram.Part, width float64) float64 {
 	}
 	return width / 2
 }
+
+// flagReach is how far it reaches to the right of the middle.
+func flagReach(p *diagram.Part, width float64) float64 { return width - flagShift(p, width) }
 
 // nodeZone is a node with its label above the rail and what hangs at it below.
 func (s *sheet) nodeZone(span diagram.Span) zone {

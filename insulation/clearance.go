@@ -27,7 +27,7 @@ const scope quantity.Voltage = 1500
 func ClearanceNeeded(g gap.Gap, v gap.Voltages) (gap.Answer[quantity.Length], error) {
 	var none gap.Answer[quantity.Length]
 	if clearance := mediumOf(g).clearance; clearance != nil {
-		return clearance(g, v)
+		return clearance(g, v.For(g.Class()))
 	}
 	if err := inAir(g); err != nil {
 		return none, err

@@ -16,7 +16,7 @@ import (
 func CreepageNeeded(g gap.Gap, v gap.Voltages) (gap.Answer[quantity.Length], error) {
 	var none gap.Answer[quantity.Length]
 	if creepage := mediumOf(g).creepage; creepage != nil {
-		return creepage(g, v)
+		return creepage(g, v.For(g.Class()))
 	}
 	if err := inAir(g); err != nil {
 		return none, err

@@ -63,28 +63,28 @@ func exponents(c *collector, f *chain.Field, s *field.Solution) {
 	}
 }
 
-// probes are the fields at stated points; on a surface the larger of both sides, and
-// each side by the body it lies in.
+// probes are the fields at stated points, the largest over the conditions of ratings; on
+// a surface the larger of both sides, and each side by the body it lies in.
 func probes(c *collector, e *evidence.Evidence, f *chain.Field) {
-	at, err := e.FieldUnder(f)
-	if err != nil {
-		return
-	}
 	for _, p := range f.Probes {
-		readings, err := at.At(profile.Point{R: p.At.V[0], Z: p.At.V[1]})
-		if err != nil || len(readings) == 0 {
-			continue
+		most := map[string]quantity.Field{}
+		var bodies []string
+		for _, r := range e.FieldReadings(f, profile.Point{R: p.At.V[0], Z: p.At.V[1]}) {
+			if _, known := most[r.Body]; !known {
+				bodies = append(bodies, r.Body)
+			}
+			most[r.Body] = max(most[r.Body], r.Strength())
 		}
 		subject := f.Name.V + "/" + p.Name.V
-		var most quantity.Field
-		for _, r := range readings {
-			most = max(most, r.Strength())
-		}
-		add(c, "field.at", subject, fieldBasis, most, nil)
-		if len(readings) > 1 && readings[0].Body != readings[1].Body {
-			for _, r := range readings {
-				add(c, "field.at", subject+"/"+r.Body, fieldBasis, r.Strength(), nil)
+		var largest quantity.Field
+		for _, body := range bodies {
+			largest = max(largest, most[body])
+			if len(bodies) > 1 {
+				add(c, "field.at", subject+"/"+body, fieldBasis, most[body], nil)
 			}
+		}
+		if bodies != nil {
+			add(c, "field.at", subject, fieldBasis, largest, nil)
 		}
 	}
 }

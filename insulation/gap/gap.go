@@ -77,3 +77,12 @@ func (g Gap) TruePressure() quantity.Pressure {
 	}
 	return g.Pressure * quantity.Pressure(g.GaugeFactor)
 }
+
+// For are the voltages that a class of insulation is dimensioned for: 160 % for
+// reinforced insulation (IEC 60664-1, memory), the same for the others.
+func (v Voltages) For(class Insulation) Voltages {
+	if class == Reinforced {
+		v.Peak, v.LongTerm = 1.6*v.Peak, 1.6*v.LongTerm
+	}
+	return v
+}

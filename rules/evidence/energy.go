@@ -1,8 +1,6 @@
 package evidence
 
 import (
-	"math"
-
 	"kilovet/hv/circuit"
 	"kilovet/hv/quantity"
 	"kilovet/hv/steady"
@@ -126,13 +124,17 @@ func (e *Evidence) ArcEnergy(string) (quantity.Energy, error) {
 // EN 50191: 2 kohm).
 const measuring quantity.Resistance = 2e3
 
-// TouchCurrent is the mean current that the supply drives through 2 kohm from a node to
-// ground, for as long as it is on.
+// TouchCurrent is the largest current that the supply drives through 2 kohm from a node
+// to ground, for as long as it is on; of an alternating one the peak.
 func (e *Evidence) TouchCurrent(node string) (quantity.Current, error) {
 	return remember(e, "touch "+e.canonical(node), func() (quantity.Current, error) {
 		c, err := e.Circuit()
 		if err != nil {
 			return 0, err
+		}
+		if node == mainsNode {
+			v, err := e.mainsPeak()
+			return quantity.Current(float64(v) / float64(measuring)), err
 		}
 		const body = "measuring resistor"
 		p, err := e.solve(c.Bridge(body, node, "ground", measuring), nil)
@@ -140,7 +142,7 @@ func (e *Evidence) TouchCurrent(node string) (quantity.Current, error) {
 			return 0, err
 		}
 		f, err := p.Through(body)
-		return quantity.Current(math.Abs(float64(f.Mean))), err
+		return f.Peak, err
 	})
 }
 

@@ -19,6 +19,15 @@ func Ratings() []Condition {
 	return all
 }
 
+// LostCorners lists the corners with regulation lost.
+func LostCorners() []Condition {
+	var all []Condition
+	for _, c := range Corners {
+		all = append(all, Condition{State: Lost, Corner: c})
+	}
+	return all
+}
+
 // LongTerm lists the conditions creepage is judged under: what can stand for long,
 // nominal.
 func LongTerm() []Condition { return []Condition{{State: Working}, {State: Cold}} }

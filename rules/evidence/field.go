@@ -2,6 +2,7 @@ package evidence
 
 import (
 	"errors"
+	"maps"
 	"slices"
 
 	"kilovet/hv/chain"
@@ -91,56 +92,118 @@ func point(rz []quantity.Length) *profile.Point {
 	return &profile.Point{R: rz[0], Z: rz[1]}
 }
 
-// FieldUnder is the field of an arrangement with its electrodes at the potentials of
-// the condition: a node at its highest over a period of the drive.
-func (e *Evidence) FieldUnder(f *chain.Field) (*field.Field, error) {
+// FieldsUnder are the fields of an arrangement at the extremes of its nodes over a period
+// of the drive, every combination of them: what swings in step is taken to swing
+// against each other too, on the cautious side.
+func (e *Evidence) FieldsUnder(f *chain.Field) ([]*field.Field, error) {
 	s, err := e.FieldOf(f)
 	if err != nil {
 		return nil, err
 	}
-	potentials := map[string]quantity.Voltage{}
+	cases := []map[string]quantity.Voltage{{}}
+	nodes := map[string]bool{}
 	for _, el := range f.Electrodes {
-		v := el.Voltage.V
-		if el.Node.Set() {
-			if v, err = e.highestSigned(el.Node.V); err != nil {
-				return nil, err
-			}
+		name := el.Name.V
+		if !el.Node.Set() {
+			each(cases, name, el.Voltage.V)
+			continue
 		}
-		potentials[el.Name.V] = v
+		w, err := e.swing(el.Node.V, "ground")
+		if err != nil {
+			return nil, err
+		}
+		if nodes[name] {
+			continue // a further piece of the same electrode
+		}
+		nodes[name] = true
+		other := copies(cases)
+		each(cases, name, w.Least)
+		each(other, name, w.Greatest)
+		cases = append(cases, other...)
 	}
-	return s.Under(potentials)
+	if len(nodes) > mostNodes {
+		return nil, lack.Range("a field with more than %d electrodes at nodes is not judged", mostNodes)
+	}
+	return under(s, cases)
 }
 
-// highestSigned is the potential of a node where it is farthest from ground.
-func (e *Evidence) highestSigned(node string) (quantity.Voltage, error) {
-	s, err := e.swing(node, "ground")
-	if -s.Least > s.Greatest {
-		return s.Least, err
+// mostNodes bounds the combinations of extremes.
+const mostNodes = 4
+
+func under(s *field.Solution, cases []map[string]quantity.Voltage) ([]*field.Field, error) {
+	var all []*field.Field
+	for _, potentials := range cases {
+		f, err := s.Under(potentials)
+		if err != nil {
+			return nil, err
+		}
+		all = append(all, f)
 	}
-	return s.Greatest, err
+	return all, nil
+}
+
+func each(cases []map[string]quantity.Voltage, name string, v quantity.Voltage) {
+	for _, c := range cases {
+		c[name] = v
+	}
+}
+
+func copies(cases []map[string]quantity.Voltage) []map[string]quantity.Voltage {
+	all := make([]map[string]quantity.Voltage, len(cases))
+	for i, c := range cases {
+		all[i] = maps.Clone(c)
+	}
+	return all
 }
 
 // FieldPeak is the greatest field on an electrode over all states and corners, and
 // where and when it stands.
 func (e *Evidence) FieldPeak(f *chain.Field, electrode string) (field.Peak, Condition, error) {
-	conditions := []Condition{{State: Working}}
-	if slices.ContainsFunc(f.Electrodes, func(el chain.Electrode) bool { return el.Node.Set() }) {
-		conditions = Ratings()
-	}
 	var most field.Peak
 	var under Condition
-	for i, c := range conditions {
-		at, err := e.Under(c).FieldUnder(f)
+	for i, c := range e.conditionsOf(f) {
+		fields, err := e.Under(c).FieldsUnder(f)
 		if err != nil {
 			return most, c, err
 		}
-		p, err := at.Peak(electrode)
-		if err != nil {
-			return most, c, err
-		}
-		if i == 0 || p.Strength > most.Strength {
-			most, under = p, c
+		for j, at := range fields {
+			p, err := at.Peak(electrode)
+			if err != nil {
+				return most, c, err
+			}
+			if i+j == 0 || p.Strength > most.Strength {
+				most, under = p, c
+			}
 		}
 	}
 	return most, under, nil
+}
+
+// FieldReadings are the readings at a point over all states and corners; none where the
+// field cannot be had or the point lies outside it.
+func (e *Evidence) FieldReadings(f *chain.Field, at profile.Point) []field.Reading {
+	var all []field.Reading
+	for _, c := range e.conditionsOf(f) {
+		fields, err := e.Under(c).FieldsUnder(f)
+		if err != nil {
+			return nil
+		}
+		for _, x := range fields {
+			readings, err := x.At(at)
+			if err != nil {
+				return nil
+			}
+			all = append(all, readings...)
+		}
+	}
+	return all
+}
+
+// conditionsOf are the conditions under which a field differs: one where no electrode
+// is at a node.
+func (e *Evidence) conditionsOf(f *chain.Field) []Condition {
+	if slices.ContainsFunc(f.Electrodes, func(el chain.Electrode) bool { return el.Node.Set() }) {
+		return Ratings()
+	}
+	return []Condition{{State: Working}}
 }

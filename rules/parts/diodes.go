@@ -69,7 +69,7 @@ var diodeSurge = rule.Rule{
 		return each(groups(e, hasDiodePart), "no multiplier diode is described", func(g group) rule.Finding {
 			rated := g.elements[0].DiodePart.SurgeCurrent
 			r := rating[quantity.Current]{what: "arc current", rated: rated.V, given: rated.Set(), key: rated.Key,
-				derating: limits.DiodeSurge, conditions: []evidence.Condition{{State: evidence.Lost}}, stress: (*evidence.Evidence).ArcDiodePeak}
+				derating: limits.DiodeSurge, conditions: evidence.LostCorners(), stress: (*evidence.Evidence).ArcDiodePeak}
 			return r.judge(e, g, about("diode.surge_current", rule.Equipment, g, rated.Place))
 		})
 	},

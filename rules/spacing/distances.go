@@ -50,8 +50,13 @@ var creepage = rule.Rule{
 	},
 	Judge: func(e *evidence.Evidence) rule.Judgement {
 		return each(e, func(s *chain.Spacing) (rule.Finding, string) {
-			if !inAir(s) && !(s.Medium.V == "vacuum" && s.Creepage.Set()) {
+			if !inAir(s) && !s.Creepage.Set() {
 				return rule.Finding{}, "creepage is judged on surfaces in air, and in vacuum where one is given"
+			}
+			if !inAir(s) && s.Medium.V != "vacuum" {
+				f := finding("spacing.creepage", concern(s), rule.AtLeast, s)
+				f.Place = s.Creepage.Place
+				return f.Lacking(lack.Range("surfaces in %s are not judged", s.Medium.V)), ""
 			}
 			return distance(e, s, "spacing.creepage", s.Creepage, func(x evidence.Spacing) gap.Result[quantity.Length] { return x.Assessment.CreepageNeeded }), ""
 		})

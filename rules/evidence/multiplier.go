@@ -86,11 +86,7 @@ func (e *Evidence) split(d *Drop, mean quantity.Voltage) error {
 
 // topOf is the magnitude of the mean at the top of an edited circuit.
 func (e *Evidence) topOf(c *circuit.Circuit) (quantity.Voltage, error) {
-	near, err := e.Network()
-	if err != nil {
-		return 0, err
-	}
-	p, err := e.solve(c, near)
+	p, err := e.solve(c, nil)
 	if err != nil {
 		return 0, err
 	}

@@ -132,3 +132,39 @@ func TestAbsentTablesNeverPass(t *testing.T) {
 		}
 	}
 }
+
+// TestRectifierOnTheBareDrive hangs a diode on the drive itself, with nothing in series
+// with the source: 1 kohm of diode and 9 kohm of burden at 1 kV peak carry a half sine,
+// whose mean at the burden is 0.9 V/π and whose power is V²/4R.
+func TestRectifierOnTheBareDrive(t *testing.T) {
+	r := reviewed(t, []byte(`format = 1
+[drive]
+waveform = "sine"
+frequency = "25 kHz"
+peak = "1 kV"
+[multiplier]
+topology = "half-wave"
+polarity = "positive"
+stages = 1
+coupling_capacitor = { value = "10 nF" }
+smoothing_capacitor = { value = "10 nF" }
+diode = { rated_voltage = "8 kV", forward_drop = "0 V", resistance = "100 ohm" }
+[[part]]
+name = "rectifier"
+kind = "diode"
+from = "drive"
+to = "half"
+forward_drop = "0 V"
+resistance = "1 kohm"
+rated_voltage = "8 kV"
+[[part]]
+name = "burden"
+kind = "resistor"
+from = "half"
+to = "ground"
+value = "9 kohm"
+`))
+	within(t, "mean at the burden", figureOf(t, r, "potential", "half"), 0.9*1000/math.Pi, 1e-5)
+	within(t, "current", figureOf(t, r, "part.current", "part.burden"), 1000/math.Pi/10e3, 1e-5)
+	within(t, "input power", figureOf(t, r, "multiplier.input_power", ""), 1000*1000/4./10e3, 1e-3)
+}

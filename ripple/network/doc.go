@@ -30,8 +30,11 @@
 // preconditioner are the charge balance between the two peaks of the drive, a convex
 // problem for any circuit; the linear equations are solved by carrying changes
 // through the stored factors of the period (Saad and Schultz, SIAM J. Sci. Stat.
-// Comput. 7 (1986) 856). The last corrections keep the mesh of steps, so that the
-// charges of a period come back to 1e-8 of what a diode passes. The network is
+// Comput. 7 (1986) 856). Where some diodes do not conduct yet Newton's method cannot be
+// believed: the state is led on in leaps of many periods, or the search starts anew
+// with the diodes pressed to conduct. The step control makes the period a continuous
+// function of its start, so that the charges come back to 1e-8 of what a diode
+// passes, at worst to 3e-7. Work is bounded; what is not reached is a lack. The network is
 // passive and monotonic: the state is unique wherever something discharges it. Where
 // nothing does, it depends on history, and the state that a vanishing leakage of the
 // diodes would leave is given: a ladder that was once higher stays higher.

@@ -24,6 +24,7 @@ type envelope struct {
 	linear  *track // of the period at the start of the leap
 	spare   *track
 	ahead   float64 // γH of the equations in hand
+	hurried bool    // time does not matter
 }
 
 func newEnvelope(s *shooter) *envelope {
@@ -32,18 +33,22 @@ func newEnvelope(s *shooter) *envelope {
 		k1: make([]float64, m), k2: make([]float64, m), linear: s.pace.track, spare: &track{system: s.system}}
 }
 
-// deviation is the part of the state that a leap may be wrong by.
-const deviation = 2e-3
+// What a leap may be wrong by: a part of the state where time matters, a part of
+// the leap where it is only to lead nearer to rest.
+const (
+	deviation = 2e-3
+	detour    = 0.3
+)
 
-// here walks the period at the present state, in the fine grade.
-func (e *envelope) here() error {
-	e.pace.grade, e.pace.track = fine, e.linear
+// here walks the period at the present state.
+func (e *envelope) here(g grade) error {
+	e.pace.grade, e.pace.track = g, e.linear
 	if err := e.walk(); err != nil {
 		return err
 	}
 	copy(e.from, e.x)
 	copy(e.start, e.r)
-	e.pace.grade, e.pace.track = rough, e.spare
+	e.pace.track = e.spare
 	return nil
 }
 
@@ -57,10 +62,13 @@ func (e *envelope) advance(most float64) error {
 			return err
 		}
 		limit := deviation * (norm(e.x) + e.pace.energy)
+		if e.hurried {
+			limit = detour * e.leap * norm(e.start)
+		}
 		more := 0.8 * math.Sqrt(limit/(wrong+1e-30))
 		if wrong <= limit {
 			e.periods += e.leap
-			if e.leap > 1 {
+			if e.leap > 1 && !e.hurried {
 				if err := e.relax(); err != nil {
 					return err
 				}

@@ -42,7 +42,7 @@ func (w *walker) euler(h, end float64) {
 	}
 	w.pattern.factorise(w.factor)
 	for k := range w.lanes {
-		w.lanes[k] = trio{r: w.pull(k, h, end) - h*w.steady[k]}
+		w.lanes[k] = trio{r: w.pull(k, h, end) - h*(w.steady[k]+(w.swing[k]-w.condSine[k])*end)}
 	}
 	for i := range w.inductors {
 		l := &w.inductors[i]

@@ -9,7 +9,11 @@ import (
 func (w *walker) crossing() (diode int, at float64) {
 	diode, at = -1, math.Inf(1)
 	for i := range w.diodes {
-		p := w.excess(i)
+		y := w.beyond(i)
+		if y.farBelow(w.slack[i]) {
+			continue
+		}
+		p := through(y[0], y[1], y[2], y[3])
 		level := math.Max(w.slack[i], p[0]*(1+1e-9)) // a diode that just switched may start beyond its slack
 		if _, high := p.hull(); high <= level {
 			continue
@@ -32,10 +36,11 @@ func (w *walker) doubtful(h float64) float64 {
 		if w.on[i] {
 			continue
 		}
-		p := w.excess(i)
-		if _, high := p.hull(); high <= -margin {
+		y := w.beyond(i)
+		if y.farBelow(-margin) {
 			continue
 		}
+		p := through(y[0], y[1], y[2], y[3])
 		for _, t := range p.turns() {
 			if t > 1e-3 && t < math.Min(at, 0.999) && p.at(t) > -margin {
 				at = t

@@ -44,22 +44,28 @@ func (p *pattern) factorise(x []trio) {
 
 // solve replaces a right-hand side by the solution.
 func (p *pattern) solve(x, y []trio) {
-	low := x[p.n:]
-	for k := range p.n {
-		v := y[k]
-		for s := p.start[k]; s < p.start[k+1]; s++ {
-			l, e := low[s], &y[p.row[s]]
+	pivot, low := x[:p.n], x[p.n:]
+	y = y[:len(pivot)]
+	for k := range pivot {
+		v, d := y[k], &pivot[k]
+		row := p.row[p.start[k]:p.start[k+1]]
+		column := low[p.start[k]:p.start[k+1]]
+		column = column[:len(row)]
+		for s, r := range row {
+			l, e := &column[s], &y[r]
 			e.r += l.r * v.r
 			e.a += l.a*v.a - l.b*v.b
 			e.b += l.a*v.b + l.b*v.a
 		}
-		d := x[k]
 		y[k] = trio{v.r * d.r, v.a*d.a - v.b*d.b, v.a*d.b + v.b*d.a}
 	}
-	for k := p.n - 1; k >= 0; k-- {
+	for k := len(pivot) - 1; k >= 0; k-- {
 		v := y[k]
-		for s := p.start[k]; s < p.start[k+1]; s++ {
-			l, w := low[s], y[p.row[s]]
+		row := p.row[p.start[k]:p.start[k+1]]
+		column := low[p.start[k]:p.start[k+1]]
+		column = column[:len(row)]
+		for s, r := range row {
+			l, w := &column[s], &y[r]
 			v.r += l.r * w.r
 			v.a += l.a*w.a - l.b*w.b
 			v.b += l.a*w.b + l.b*w.a

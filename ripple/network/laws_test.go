@@ -104,3 +104,26 @@ func TestBalances(t *testing.T) {
 		}
 	}
 }
+
+// A diode that hangs on an ideal source alone still passes only what its other end
+// takes: a coupling capacitor shorted, and nothing in series with the source.
+func TestDiodeOnTheSource(t *testing.T) {
+	for _, drive := range []string{"sine", "square"} {
+		l := ladder{stages: 1, drive: drive, frequency: 10, peak: 100, capacitance: 1e-6, current: 1e-4, drop: 5, on: 1e3}
+		c := build(t, l.describe()).Short("multiplier.coupling_capacitor.1")
+		p := steady(t, c)
+		near(t, drive+" mean current of the diode", float64(p.Diode("multiplier.diode.2").Mean), 1e-4, 1e-6)
+		s, err := p.At(node(t, c, "multiplier"))
+		if err != nil || s.Mean < 70 || s.Greatest > 95 {
+			t.Errorf("%s: a rectifier at 100 V less 5 V gives %+v (%v)", drive, s, err)
+		}
+		taken, given := 0.0, 0.0
+		for i := range c.Elements {
+			w := float64(p.Power(c.Elements[i].Name))
+			taken, given = taken+w, given+math.Abs(w)
+		}
+		if math.Abs(taken) > 1e-6*given {
+			t.Errorf("%s: %g W of %g W left", drive, taken, given)
+		}
+	}
+}

@@ -19,6 +19,7 @@ type peaks struct {
 	soft    []float64 // by diode: on-conductance, no more than needed to tie its ends together
 	early   []int     // entries between potentials at the positive peak
 	shift   float64   // of the prepared equations
+	pressed float64
 }
 
 func newPeaks(s *system) *peaks {
@@ -62,7 +63,7 @@ func (p *peaks) soften() {
 		d := &p.diodes[i]
 		p.soft[i] = d.on
 		if c := least(p.own, d.a, d.b); c > 0 {
-			p.soft[i] = math.Min(d.on, stiff*c/p.half())
+			p.soft[i] = math.Min(p.soft[i], stiff*c/p.half())
 		}
 	}
 }
@@ -135,7 +136,24 @@ func (p *peaks) assemble() {
 	for k := range n {
 		for half := range 2 {
 			s := 1 - 2*float64(half)
-			p.pull[k+half*n] = -(h*(p.condDirect[k]+s*(p.condSquare[k]+p.condSine[k])) + 2*s*(p.capSquare[k]+p.capSine[k]))
+			p.pull[k+half*n] = -2 * s * (p.capSquare[k] + p.capSine[k])
+		}
+	}
+	for half := range 2 {
+		s := 1 - 2*float64(half)
+		y := p.pull[half*n : (half+1)*n]
+		for i := range p.resistors {
+			r := &p.resistors[i]
+			r.inject(y, -h*r.value*r.offset.at(s, s))
+		}
+		for i := range p.diodes {
+			d := &p.diodes[i]
+			if d.a != d.b {
+				d.inject(y, -h*d.leak*d.offset.at(s, s))
+			}
+		}
+		for i := range p.sinks {
+			p.sinks[i].inject(y, -h*p.sinks[i].value)
 		}
 	}
 	for i := range p.inductors {
@@ -151,6 +169,21 @@ func (p *peaks) assemble() {
 func (p *peaks) over(i, half int, u []float64) float64 {
 	s := 1 - 2*float64(half)
 	return p.diodes[i].volts(u[half*p.n:(half+1)*p.n], s, s) - p.diodes[i].drop
+}
+
+// press makes every diode pass a part of the charge of its capacitance at the
+// drive's peak, by a current that leads as much back past it: the ladder stands
+// lower, and every diode that has a part in the state conducts.
+func (p *peaks) press(part float64) {
+	for i := range p.diodes {
+		d := &p.diodes[i]
+		if c := least(p.own, d.a, d.b); d.a != d.b {
+			q := (part - p.pressed) * c * p.scale / 2
+			d.inject(p.pull[:p.n], q)
+			d.inject(p.pull[p.n:], q)
+		}
+	}
+	p.pressed = part
 }
 
 // solve finds the potentials at the peaks.

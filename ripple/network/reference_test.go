@@ -130,6 +130,10 @@ func (r *reference) describe() string {
 // build makes the circuit of a description at the peak it gives.
 func build(t testing.TB, text string) *circuit.Circuit {
 	t.Helper()
+	return buildFor(t, text)
+}
+
+func buildFor(t interface{ Fatalf(string, ...any) }, text string) *circuit.Circuit {
 	c, faults := chain.Read([]byte(text))
 	if len(faults) > 0 {
 		t.Fatalf("%v\n%s", faults, text)

@@ -103,7 +103,7 @@ func (r *rise) stair(part float64) (*envelope, error) {
 		return nil, err
 	}
 	h := newShooter(s)
-	h.guess()
+	h.guess(0)
 	passed := math.Max(h.pace.passed, 0.1*s.typical*s.scale)
 	if r.x != nil {
 		copy(h.x, r.x)
@@ -120,7 +120,7 @@ func (r *rise) stair(part float64) (*envelope, error) {
 // look walks the period at the present state and reports whether the node comes up
 // in it.
 func (r *rise) look(e *envelope) (bool, error) {
-	if err := e.here(); err != nil {
+	if err := e.here(fine); err != nil {
 		return false, err
 	}
 	s, node := e.frame, r.options.Node
@@ -162,7 +162,7 @@ func (r *rise) climb(e *envelope, until float64) (done bool, err error) {
 			beyond = e.periods
 			copy(e.x, before)
 			e.periods = at
-			if err := e.here(); err != nil {
+			if err := e.here(fine); err != nil {
 				return false, err
 			}
 		}

@@ -21,9 +21,6 @@ type Options struct {
 // its state does not depend on it.
 const idle quantity.Frequency = 1
 
-// most is the number of corrections in each grade after which a search ends.
-const most = 40
-
 // Steady finds the periodic state of a circuit under its drive. The error is a lack
 // where a value of the circuit is in doubt, where sources contradict one another,
 // where a load draws current that nothing feeds, or where the state was not reached.
@@ -39,22 +36,44 @@ func Steady(c *circuit.Circuit, o Options) (*Periodic, error) {
 	if err != nil {
 		return nil, err
 	}
-	h := newShooter(s)
-	h.guess()
-	if o.From != nil {
-		h.startFrom(o.From)
-	}
-	return h.search()
+	return newShooter(s).solve(o.From)
 }
 
-// search goes from the guess to the periodic state.
-func (s *shooter) search() (*Periodic, error) {
-	if err := s.approach(rough, 1e-4, most); err != nil {
+// attempts are how hard the diodes are pressed to conduct in the guesses that a
+// search starts from, in parts of the charge that takes a ladder down by about its
+// own voltage, and how many leaps it may take from there.
+var attempts = []struct {
+	press float64
+	leaps int
+}{{0, 2}, {0.05, 6}, {0.5, 10}, {5, 100}}
+
+// solve searches from one guess after the other.
+func (s *shooter) solve(from *Periodic) (*Periodic, error) {
+	h := newSearch(s)
+	var err error
+	for _, a := range attempts {
+		s.guess(a.press / float64(1+len(s.diodes)*len(s.diodes)))
+		if from != nil {
+			s.startFrom(from)
+			from = nil
+		}
+		h.patience = a.leaps
+		if err = h.approach(rough, 1e-4); err == nil {
+			break
+		}
+	}
+	if err != nil {
 		return nil, err
 	}
+	return h.refine()
+}
+
+// refine goes from the state in the rough grade to that in the fine one.
+func (s *search) refine() (*Periodic, error) {
 	s.judge(math.Max(s.pace.passed, s.pace.track.passed()))
 	before := append([]float64(nil), s.x...)
-	if err := s.converge(fine, most); err != nil {
+	s.patience = 20
+	if err := s.converge(fine); err != nil {
 		return nil, err
 	}
 	p := s.periodic()

@@ -18,6 +18,7 @@ type walker struct {
 	u      []float64 // potentials at the end of the last step
 	on     []bool    // by diode
 	steady []float64 // direct currents under the present switching
+	swing  []float64 // currents that go with the sine under the present switching
 	held   []float64 // charge of the direct and square offsets
 	matrix []float64 // G under the present switching
 
@@ -37,6 +38,7 @@ type walker struct {
 func newWalker(s *system) *walker {
 	w := &walker{system: s, sign: 1, wave: 1}
 	w.q, w.u, w.steady, w.held = make([]float64, s.n), make([]float64, s.n), make([]float64, s.n), make([]float64, s.n)
+	w.swing = make([]float64, s.n)
 	w.amps, w.on = make([]float64, len(s.inductors)), make([]bool, len(s.diodes))
 	w.matrix, w.slack = make([]float64, s.pattern.size()), make([]float64, len(s.diodes))
 	w.factor, w.lanes = make([]trio, s.pattern.size()), make([]trio, s.n)
@@ -58,6 +60,7 @@ func (w *walker) place(q, amps []float64, on []bool) {
 // switched renews what depends on the diodes that conduct and on the square wave.
 func (w *walker) switched() {
 	copy(w.matrix, w.cond)
+	copy(w.swing, w.condSine)
 	for k := range w.steady {
 		w.steady[k] = w.condDirect[k] + w.sign*w.condSquare[k]
 		w.held[k] = w.capDirect[k] + w.sign*w.capSquare[k]
@@ -67,6 +70,7 @@ func (w *walker) switched() {
 			w.enter(w.matrix, &d.span, d.on)
 			if d.a != d.b {
 				d.inject(w.steady, d.on*(d.offset.direct+w.sign*d.offset.square-d.drop))
+				d.inject(w.swing, d.on*d.offset.sine)
 			}
 		}
 	}
@@ -121,7 +125,7 @@ func (w *walker) load(h float64) {
 	p := complex(poleA, poleB) * w.poleLow
 	for k, q := range w.q {
 		q -= w.held[k]
-		g, c, i := w.steady[k], w.capSine[k], h*w.condSine[k]
+		g, c, i := w.steady[k], w.capSine[k], h*w.swing[k]
 		w.lanes[k] = trio{
 			q - h/poleR*g - (poleR*c+i)*w.poleR,
 			q - ga*g - (real(p)*c + real(w.poleLow)*i),
@@ -224,15 +228,40 @@ func (w *walker) roughness() float64 {
 // excess is how far a diode has gone beyond its present state over the trial step,
 // as a cubic: the voltage above the drop while open, below it while conducting.
 func (w *walker) excess(i int) cubic {
+	y := w.beyond(i)
+	return through(y[0], y[1], y[2], y[3])
+}
+
+// beyond is the same at the start and the stages.
+func (w *walker) beyond(i int) samples {
 	d := &w.diodes[i]
-	y0 := d.volts(w.u, w.sign, w.sine[0]) - d.drop
-	y1 := d.volts(w.stage[0], w.sign, w.sine[1]) - d.drop
-	y2 := d.volts(w.stage[1], w.sign, w.sine[2]) - d.drop
-	y3 := d.volts(w.stage[2], w.sign, w.sine[3]) - d.drop
-	if w.on[i] {
-		y0, y1, y2, y3 = -y0, -y1, -y2, -y3
+	least := d.offset.direct + w.sign*d.offset.square - d.drop
+	swing := d.offset.sine
+	y := samples{least + swing*w.sine[0], least + swing*w.sine[1], least + swing*w.sine[2], least + swing*w.sine[3]}
+	if k := d.a; k >= 0 {
+		y[0], y[1], y[2], y[3] = y[0]+w.u[k], y[1]+w.stage[0][k], y[2]+w.stage[1][k], y[3]+w.stage[2][k]
 	}
-	return through(y0, y1, y2, y3)
+	if k := d.b; k >= 0 {
+		y[0], y[1], y[2], y[3] = y[0]-w.u[k], y[1]-w.stage[0][k], y[2]-w.stage[1][k], y[3]-w.stage[2][k]
+	}
+	if w.on[i] {
+		y[0], y[1], y[2], y[3] = -y[0], -y[1], -y[2], -y[3]
+	}
+	return y
+}
+
+// farBelow reports whether a cubic through samples surely stays under a level: it
+// leaves their range by less than the range itself.
+func (y *samples) farBelow(level float64) bool {
+	low, high := y[0], y[0]
+	for _, v := range y[1:] {
+		if v > high {
+			high = v
+		} else if v < low {
+			low = v
+		}
+	}
+	return high+(high-low) < level
 }
 
 // tolerate sets the excess of the diodes that does not count: what makes a part of

@@ -1,0 +1,106 @@
+package network
+
+import (
+	"fmt"
+	"math"
+	"testing"
+
+	"kilovet/hv/circuit"
+	"kilovet/hv/quantity"
+
+	"pgregory.net/rapid"
+)
+
+// decade draws a value evenly over decades.
+func decade(t *rapid.T, name string, low, high float64) float64 {
+	return math.Pow(10, rapid.Float64Range(math.Log10(low), math.Log10(high)).Draw(t, name))
+}
+
+// drawLadder draws a ladder with anything that a description may hold about it.
+func drawLadder(t *rapid.T) string {
+	pick := func(name string, words ...string) string { return rapid.SampledFrom(words).Draw(t, name) }
+	maybe := func(name string, low, high float64) float64 {
+		if rapid.Bool().Draw(t, "no "+name) {
+			return 0
+		}
+		return decade(t, name, low, high)
+	}
+	f := decade(t, "frequency", 1, 1e7)
+	c := decade(t, "capacitance", 1e-11, 1e-6)
+	l := ladder{
+		stages: rapid.IntRange(1, 4).Draw(t, "stages"), topology: pick("topology", "half-wave", "symmetrical"),
+		polarity: pick("polarity", "positive", "negative"), drive: pick("drive", "sine", "square"),
+		frequency: f, peak: decade(t, "peak", 100, 1e4), capacitance: c,
+		resistance: math.Min(1e9, maybe("source resistance", 1e-4, 1)/(f*c)), inductor: math.Min(1e3, maybe("source inductance", 1e-4, 1)/(f*f*c*40)),
+		current: math.Min(99, maybe("load", 1e-6, 1)*f*c*100), drop: maybe("drop", 0.1, 50), on: math.Min(1e9, maybe("on-resistance", 1e-6, 0.1)/(f*c)),
+		junction: maybe("junction", 1e-5, 1e-1) * c, leakage: fmt.Sprintf("%g A", math.Min(1, maybe("leakage", 1e-9, 1e-3)*f*c*1000)),
+	}
+	if rapid.Bool().Draw(t, "filter") {
+		l.more = fmt.Sprintf("[[filter]]\nresistor = { value = \"%g ohm\" }\ncapacitor = { value = \"%g F\" }\nbypass_capacitance = \"%g F\"\n",
+			decade(t, "filter resistance", 1e3, 1e9), decade(t, "filter capacitance", 1e-12, 1e-7), maybe("bypass", 1e-14, 1e-11))
+		l.more += fmt.Sprintf("[[load]]\nname = \"out\"\nat = \"output\"\nresistance = \"%g ohm\"\n", decade(t, "load resistance", 1e6, 1e12))
+	}
+	return l.describe()
+}
+
+// fault draws what may go wrong with one element.
+func fault(t *rapid.T, c *circuit.Circuit) *circuit.Circuit {
+	name := rapid.SampledFrom(names(c)).Draw(t, "element")
+	switch rapid.SampledFrom([]string{"none", "open", "short", "reverse"}).Draw(t, "fault") {
+	case "open":
+		return c.Open(name)
+	case "short":
+		return c.Short(name)
+	case "reverse":
+		return c.Reverse(name)
+	}
+	return c
+}
+
+func names(c *circuit.Circuit) []string {
+	var list []string
+	for i := range c.Elements {
+		list = append(list, c.Elements[i].Name)
+	}
+	return list
+}
+
+// Any ladder with any single fault ends in a balanced state or in a lack, after
+// bounded work.
+func TestAnyLadder(t *testing.T) {
+	rapid.Check(t, func(t *rapid.T) { checkAny(t) })
+}
+
+// FuzzAnyLadder is the same under the fuzzer: go test -fuzz FuzzAnyLadder ./ripple/network
+func FuzzAnyLadder(f *testing.F) {
+	f.Fuzz(rapid.MakeFuzz(checkAny))
+}
+
+func checkAny(t *rapid.T) {
+	c := fault(t, buildFor(t, drawLadder(t)))
+	p, err := Steady(c, Options{})
+	if err != nil {
+		t.Logf("%v", err)
+		return
+	}
+	if p.Work.Periods > 1200 || p.Work.Steps > 60000 {
+		t.Errorf("work %+v", p.Work)
+	}
+	for n := range c.Nodes() {
+		if s, err := p.At(circuit.Node(n)); err == nil && !(finite([]float64{float64(s.Mean), float64(s.Least), float64(s.Greatest)}) && s.Least <= s.Mean+1e-6*s.Peak() && s.Mean <= s.Greatest+1e-6*s.Peak()) {
+			t.Errorf("%v: %+v", c.Labels(circuit.Node(n)), s)
+		}
+	}
+	taken, given := 0.0, 0.0
+	for i := range c.Elements {
+		e := &c.Elements[i]
+		if _, err := p.Through(e.Name); err != nil {
+			return // impulses
+		}
+		w := float64(p.Power(e.Name))
+		taken, given = taken+w, given+math.Abs(w)
+	}
+	if math.Abs(taken) > 1e-4*given+1e-9*float64(c.Elements[0].Wave.Amplitude*c.Elements[0].Wave.Amplitude)*float64(quantity.Frequency(p.track.typical)*p.Frequency) {
+		t.Errorf("power %g W left of %g W (%+v)", taken, given, p.Work)
+	}
+}

@@ -1,0 +1,182 @@
+package network
+
+import (
+	"math"
+
+	"kilovet/hv/lack"
+)
+
+// search corrects a state until a period brings it back. Newton's correction is
+// taken where it can be believed; where some diodes do not conduct yet it cannot,
+// and the state is led on in leaps of many periods, as time itself would.
+type search struct {
+	*envelope
+	patience  int     // leaps it may take
+	last      float64 // change over the period at the state corrected last
+	trial     bool    // the last correction has yet to prove itself
+	still     int     // corrections in a row that led hardly nearer
+	leaps     int     // taken
+	amplified float64 // largest correction so far over the change over the period it answers
+	stray     bool    // Newton's method led astray: leap next
+}
+
+// Most corrections, and most periods walked, in each grade.
+const (
+	mostCorrections = 60
+	mostWalks       = 600
+)
+
+func newSearch(s *shooter) *search {
+	e := newEnvelope(s)
+	e.hurried = true
+	return &search{envelope: e}
+}
+
+// approach corrects the state in one grade until a correction is a small part of it.
+func (s *search) approach(g grade, small float64) error {
+	return s.until(g, func() bool {
+		if norm(s.step) > small*norm(s.x) {
+			return false
+		}
+		axpy(1, s.step, s.x)
+		return true
+	})
+}
+
+// converge corrects the state until the charges come back.
+func (s *search) converge(g grade) error {
+	last := math.Inf(1)
+	return s.until(g, func() bool {
+		size := norm(s.r)
+		stalled := size > 0.3*last
+		last = size
+		small := 1e-9
+		if stalled { // what is left is rounding, which a mode that only leakage ties down makes much of
+			small = 1e-5
+		}
+		return norm(s.step) <= small*norm(s.x) && s.balanced(stalled)
+	})
+}
+
+// until walks and corrects until told that it is done.
+func (s *search) until(g grade, done func() bool) error {
+	s.pace.smooth, s.stray, s.last, s.leap, s.trial, s.still, s.leaps = false, false, math.Inf(1), 1, false, 0, 0
+	walked := s.pace.work.Periods
+	for range mostCorrections {
+		if s.pace.work.Periods-walked > mostWalks || s.pace.work.Steps > s.budget() {
+			break
+		}
+		finished, err := s.once(g, done)
+		if finished || err != nil {
+			return err
+		}
+	}
+	return lack.Failed("the periodic state was not reached in %d periods", s.pace.work.Periods-walked)
+}
+
+// budget is the number of steps after which a search is given up: ten times what
+// any ordinary ladder takes.
+func (s *search) budget() int { return 20000 + 500*len(s.diodes) }
+
+// exacting is the part of what the diodes pass below which corrections of the
+// charges ask for events to be located as well as the arithmetic allows.
+const exacting = 0.05
+
+// once walks one period and corrects the state.
+func (s *search) once(g grade, done func() bool) (finished bool, err error) {
+	if err := s.here(g); err != nil {
+		return false, err
+	}
+	size := norm(s.r)
+	if s.still++; size < 0.7*s.last {
+		s.still = 0
+	}
+	if size > 3*s.last || s.trial && size > s.last {
+		copy(s.x, s.good)
+		s.stray, s.last, s.trial, s.still = true, math.Inf(1), false, 0
+		return false, nil
+	}
+	if s.stray || s.still > 2 || !s.correct() {
+		s.stray, s.still, s.last, s.pace.smooth, s.trial = false, 0, math.Inf(1), false, false
+		if s.leaps++; s.leaps > s.patience {
+			return false, lack.Failed("the periodic state was not reached in %d periods", s.pace.work.Periods)
+		}
+		return false, s.advance(math.Inf(1))
+	}
+	s.work.Iterations++
+	if done() {
+		s.pace.track = s.linear
+		return true, nil
+	}
+	copy(s.good, s.x)
+	s.last = size
+	axpy(1, s.step, s.x)
+	s.pace.smooth = s.largestCharge(s.step) <= exacting*s.pace.passed
+	return false, nil
+}
+
+// bold is how many times the correction of the circuit between the peaks one of
+// Newton's may be. Where some diode does not conduct at all, Newton's method may ask
+// for anything; between the peaks every diode has its part.
+const bold = 10
+
+// daring is the part of the state beyond which such a correction is not even tried.
+const daring = 0.05
+
+// correct computes Newton's correction of the state into step and reports whether
+// it can be believed.
+func (s *search) correct() bool {
+	s.peaks.prepare(0)
+	s.newton()
+	copy(s.old, s.r)
+	s.precondition(s.old)
+	s.trial = norm(s.step) > bold*norm(s.old)
+	return !s.trial || norm(s.step) < daring*norm(s.x)
+}
+
+// newton solves Newton's equations, and again for what the solution leaves of them,
+// until that can no longer stand for a tenth of the correction: where only leakage
+// ties a mode down, a little of it makes much.
+func (s *search) newton() {
+	for i := range s.step {
+		s.step[i] = 0
+	}
+	left := s.k1
+	copy(left, s.r)
+	size := norm(s.r)
+	for range 4 {
+		rest := s.solver.solve(left, func(x []float64) { s.minus(s.linear, x) }, s.precondition, 1e-3)
+		axpy(1, left, s.step)
+		if size == 0 {
+			return
+		}
+		s.amplified = math.Max(s.amplified, norm(s.step)/norm(s.r))
+		if size *= rest; s.amplified*size <= 0.1*norm(s.step) {
+			return
+		}
+		copy(left, s.step)
+		s.minus(s.linear, left)
+		for i, r := range s.r {
+			left[i] = r - left[i]
+		}
+	}
+}
+
+// balanced reports whether the charges come back to 1e-8 of what the diodes pass,
+// or, where rounding keeps them from coming any closer, to 3e-7.
+func (s *shooter) balanced(stalled bool) bool {
+	worst, most := s.largestCharge(s.r), s.largestCharge(s.x)
+	if stalled {
+		return worst <= math.Max(3e-7*s.pace.passed, 1e-11*most)
+	}
+	return worst <= math.Max(1e-8*s.pace.passed, 1e-13*most)
+}
+
+// largestCharge is the largest charge in a state or a change of it.
+func (s *shooter) largestCharge(x []float64) float64 {
+	most := 0.0
+	for j := range s.inner {
+		most = math.Max(most, math.Abs(x[j]/s.root[j]))
+	}
+	return most
+}

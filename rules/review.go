@@ -3,6 +3,8 @@
 package rules
 
 import (
+	"kilovet/rules/diagram"
+	"kilovet/rules/exhibit"
 	"kilovet/rules/figure"
 	"kilovet/rules/rule"
 )
@@ -23,6 +25,10 @@ type Review struct {
 	Cautions    []rule.Caution
 	PassedOver  []rule.PassedOver
 	Assumptions []string
+	Curves      []exhibit.Curve
+	Tables      []exhibit.Table
+	// Diagram is the circuit ready to be drawn, its findings marked.
+	Diagram *diagram.Diagram
 	// Deference says what the review does not replace.
 	Deference string
 }

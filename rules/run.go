@@ -2,6 +2,7 @@ package rules
 
 import (
 	"kilovet/hv/chain"
+	"kilovet/rules/diagram"
 	"kilovet/rules/evidence"
 	"kilovet/rules/optics"
 	"kilovet/rules/parts"
@@ -35,6 +36,8 @@ func Run(c *chain.Chain, inputs []Input, program Program) *Review {
 		}
 	}
 	r.Figures = figures(e)
+	r.Curves, r.Tables = curves(e), tables(e)
+	r.Diagram = diagram.Of(e, r.Findings)
 	r.Cautions = cautions(c)
 	r.Assumptions = assumptions(e, r.Findings)
 	r.Summary = summary(e)

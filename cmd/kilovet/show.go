@@ -19,8 +19,6 @@ import (
 	"kilovet/hv/chain"
 	"kilovet/hv/document"
 	"kilovet/reports/html"
-	"kilovet/rules/diagram"
-	"kilovet/rules/evidence"
 )
 
 // showing is a description that is shown while it is written.
@@ -146,7 +144,7 @@ func (s *showing) page(given source, version string) ([]byte, error) {
 	if given.note != "" {
 		return html.Faults(name, nil, document.Faults{{Line: 1, Column: 1, What: given.note}}, o)
 	}
-	c, faults := chain.Read(given.data)
+	_, faults := chain.Read(given.data)
 	if len(faults) > 0 {
 		return html.Faults(name, given.data, faults, o)
 	}
@@ -154,6 +152,6 @@ func (s *showing) page(given source, version string) ([]byte, error) {
 	if err != nil {
 		return nil, errors.New("a description without faults was refused")
 	}
-	o.Diagram = diagram.Of(evidence.New(c), review.Findings)
+	o.Diagram = review.Diagram
 	return html.RenderWith(review, o)
 }

@@ -33,6 +33,16 @@ func Render(r *rules.Review) ([]byte, error) {
 }
 
 func finite(r *rules.Review) error {
+	for _, c := range r.Curves {
+		if err := c.Check(); err != nil {
+			return err
+		}
+	}
+	for _, t := range r.Tables {
+		if err := t.Check(); err != nil {
+			return err
+		}
+	}
 	for _, f := range r.Figures {
 		if !isFinite(f.Value) {
 			return fmt.Errorf("json: figure %s of %q in state %q is not a finite number", f.ID, f.Subject, f.State)

@@ -27,6 +27,8 @@ type (
 		Heading     map[string]string `json:"heading"`
 		Summary     []line            `json:"summary"`
 		Deference   string            `json:"deference"`
+		Curves      []curve           `json:"curves"`
+		Tables      []table           `json:"tables"`
 	}
 	program struct {
 		Name    string `json:"name"`
@@ -111,6 +113,7 @@ func shape(r *rules.Review) review {
 		Assumptions: each(r.Assumptions, same), Heading: headingOf(r.Heading),
 		Summary:   each(r.Summary, func(l rules.Line) line { return line(l) }),
 		Deference: r.Deference,
+		Curves:    each(r.Curves, curveOf), Tables: each(r.Tables, tableOf),
 	}
 }
 

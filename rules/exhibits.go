@@ -1,0 +1,30 @@
+package rules
+
+import (
+	"kilovet/rules/evidence"
+	"kilovet/rules/exhibit"
+)
+
+// curves lists every curve of a review in the order of print; a maker gives nothing
+// where there is nothing to show.
+func curves(e *evidence.Evidence) []exhibit.Curve {
+	return gather(e,
+		waveforms,
+	)
+}
+
+// tables lists every table of a review in the order of print.
+func tables(e *evidence.Evidence) []exhibit.Table {
+	return gather(e,
+		losses,
+	)
+}
+
+// gather runs the makers in order.
+func gather[T any](e *evidence.Evidence, makers ...func(*evidence.Evidence) []T) []T {
+	var all []T
+	for _, make := range makers {
+		all = append(all, make(e)...)
+	}
+	return all
+}

@@ -15,7 +15,6 @@ import (
 	"github.com/spf13/cobra"
 
 	"kilovet"
-	"kilovet/hv/chain"
 	"kilovet/reports/digest"
 	"kilovet/reports/json"
 	"kilovet/reports/page"
@@ -139,7 +138,7 @@ func readAll(name string, from io.Reader) (source, error) {
 // review reads the description and runs the rules; faults of the description are
 // all listed and end the run.
 func (r *reviewing) review(given source) (*rules.Review, error) {
-	c, faults := chain.Read(given.data)
+	c, faults := rules.Read(given.data)
 	if len(faults) > 0 {
 		for _, f := range faults {
 			fmt.Fprintln(r.err, digest.Clean(faultLine(given.name, f)))

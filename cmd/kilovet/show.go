@@ -16,9 +16,9 @@ import (
 
 	"github.com/spf13/cobra"
 
-	"kilovet/hv/chain"
 	"kilovet/hv/document"
 	"kilovet/reports/html"
+	"kilovet/rules"
 )
 
 // showing is a description that is shown while it is written.
@@ -144,7 +144,7 @@ func (s *showing) page(given source, version string) ([]byte, error) {
 	if given.note != "" {
 		return html.Faults(name, nil, document.Faults{{Line: 1, Column: 1, What: given.note}}, o)
 	}
-	_, faults := chain.Read(given.data)
+	_, faults := rules.Read(given.data)
 	if len(faults) > 0 {
 		return html.Faults(name, given.data, faults, o)
 	}

@@ -73,17 +73,9 @@ type model struct {
 // type profile.Faults.
 func newModel(a *Arrangement, resistive bool) (*model, error) {
 	m := &model{Arrangement: a, resistive: resistive}
-	faults := m.checkNames()
-	if len(faults) == 0 {
-		m.outlines, m.owners, faults = a.outlines()
-	}
-	if len(faults) > 0 {
+	if faults := m.draw(); len(faults) > 0 {
 		return nil, faults
 	}
-	m.mirror, m.outlines, m.owners = findMirror(m.outlines, m.owners)
-	m.unit = float64(profile.Extent(m.outlines...))
-	m.plane = profile.NewPlane(m.outlines)
-	m.nameElectrodes()
 	for _, step := range []func() profile.Faults{m.checkPlane, m.findRegions, m.findWalls, m.checkUse} {
 		if faults := step(); len(faults) > 0 {
 			return nil, faults
@@ -91,6 +83,22 @@ func newModel(a *Arrangement, resistive bool) (*model, error) {
 	}
 	m.findJunctions()
 	return m, nil
+}
+
+// draw lays the outlines over each other.
+func (m *model) draw() profile.Faults {
+	faults := m.checkNames()
+	if len(faults) == 0 {
+		m.outlines, m.owners, faults = m.Arrangement.outlines()
+	}
+	if len(faults) > 0 {
+		return faults
+	}
+	m.mirror, m.outlines, m.owners = findMirror(m.outlines, m.owners)
+	m.unit = float64(profile.Extent(m.outlines...))
+	m.plane = profile.NewPlane(m.outlines)
+	m.nameElectrodes()
+	return nil
 }
 
 // nameElectrodes lists the electrodes, with the earthed boundary last if there is one.

@@ -99,13 +99,8 @@ func (s *Solution) checkPotentials(potentials map[string]quantity.Voltage) error
 			return lack.Range("the potential of %s cannot be %v", name, v)
 		}
 	}
-	var faults profile.Faults
-	for i, pair := range s.tied {
-		if !quantity.Equal(potentials[s.names[pair[0]]], potentials[s.names[pair[1]]]) {
-			faults = append(faults, s.touching[i])
-		}
-	}
-	if len(faults) > 0 {
+	same := func(a, b string) bool { return quantity.Equal(potentials[a], potentials[b]) }
+	if faults := s.apart(same); len(faults) > 0 {
 		return faults
 	}
 	return nil

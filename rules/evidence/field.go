@@ -16,80 +16,22 @@ import (
 // electrode in turn.
 func (e *Evidence) FieldOf(f *chain.Field) (*field.Solution, error) {
 	return remember(e.Under(Condition{}), "field "+f.Name.V, func() (*field.Solution, error) {
-		a, err := arrangement(f)
-		if err != nil {
-			return nil, err
+		s := sketchOf(f)
+		if len(s.faults) > 0 {
+			return nil, spoilt(s.faults)
 		}
-		s, err := field.Solve(a)
+		solution, err := field.Solve(s.Arrangement)
 		var wrong profile.Faults
 		if errors.As(err, &wrong) {
-			return nil, lack.Failed("the outlines do not make a figure: %s", wrong[0].Error())
+			return nil, spoilt(wrong)
 		}
-		return s, err
+		return solution, err
 	})
 }
 
-// arrangement turns a described field into outlines; pieces of one name are one electrode.
-func arrangement(f *chain.Field) (field.Arrangement, error) {
-	var a field.Arrangement
-	for _, el := range f.Electrodes {
-		p, err := outline(el.Name.V, el.Profile)
-		if err != nil {
-			return a, err
-		}
-		i := slices.IndexFunc(a.Electrodes, func(x field.Electrode) bool { return x.Name == el.Name.V })
-		if i < 0 {
-			i = len(a.Electrodes)
-			a.Electrodes = append(a.Electrodes, field.Electrode{Name: el.Name.V})
-		}
-		a.Electrodes[i].Profiles = append(a.Electrodes[i].Profiles, p)
-	}
-	for _, d := range f.Dielectrics {
-		p, err := outline(d.Name.V, d.Profile)
-		if err != nil {
-			return a, err
-		}
-		a.Dielectrics = append(a.Dielectrics, field.Dielectric{Name: d.Name.V, Permittivity: d.Permittivity.V, Resistivity: d.Resistivity.V, Profile: p})
-	}
-	for _, b := range f.Boundary {
-		p, err := outline("boundary", b.Profile)
-		if err != nil {
-			return a, err
-		}
-		kind := field.Natural
-		if b.Kind.V == "earth" {
-			kind = field.Earth
-		}
-		a.Boundaries = append(a.Boundaries, field.Boundary{Kind: kind, Profile: p})
-	}
-	return a, nil
-}
-
-// outline builds a profile from the strokes of the description.
-func outline(name string, strokes []chain.Stroke) (profile.Profile, error) {
-	var list []profile.Stroke
-	for _, s := range strokes {
-		one := profile.Stroke{From: point(s.From.V), To: point(s.To.V), Centre: point(s.Centre.V)}
-		if s.Turn.V == "right" {
-			one.Turn = profile.Right
-		} else if s.Turn.V == "left" {
-			one.Turn = profile.Left
-		}
-		list = append(list, one)
-	}
-	p, err := profile.New(name, list)
-	var wrong profile.Faults
-	if errors.As(err, &wrong) {
-		return p, lack.Failed("%s", wrong[0].Error())
-	}
-	return p, err
-}
-
-func point(rz []quantity.Length) *profile.Point {
-	if len(rz) != 2 {
-		return nil
-	}
-	return &profile.Point{R: rz[0], Z: rz[1]}
+// spoilt says that outlines make no figure. Reading a description finds it first.
+func spoilt(wrong profile.Faults) error {
+	return lack.Failed("the outlines do not make a figure: %s", wrong[0].Error())
 }
 
 // FieldsUnder are the fields of an arrangement at the extremes of its nodes over a period

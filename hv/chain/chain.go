@@ -56,12 +56,13 @@ type Chain struct {
 // Site is where the chain stands.
 type Site struct {
 	document.Table
-	Altitude            document.Given[quantity.Length]      `key:"altitude" range:">= -500 m, <= 9000 m" means:"height above sea level" example:"240 m"`
-	AirTemperature      document.Given[quantity.Temperature] `key:"air_temperature" range:">= -40 degC, <= 90 degC" means:"hottest air at the parts" example:"30 degC"`
-	PollutionDegree     document.Given[int]                  `key:"pollution_degree" range:">= 1, <= 4" means:"pollution degree (IEC 60664-1)" example:"2"`
-	Mains               document.Given[quantity.Voltage]     `key:"mains" range:"> 0 V, <= 1000 V" means:"mains voltage, rms" example:"230 V"`
-	MainsFrequency      document.Given[quantity.Frequency]   `key:"mains_frequency" range:"> 0 Hz, <= 1 kHz" means:"mains frequency" example:"50 Hz"`
-	OvervoltageCategory document.Given[int]                  `key:"overvoltage_category" range:">= 1, <= 4" means:"overvoltage category (IEC 60664-1)" example:"2"`
+	Altitude            document.Given[quantity.Length]          `key:"altitude" range:">= -500 m, <= 9000 m" means:"height above sea level" example:"240 m"`
+	AirTemperature      document.Given[quantity.Temperature]     `key:"air_temperature" range:">= -40 degC, <= 90 degC" means:"hottest air at the parts" example:"30 degC"`
+	TemperatureChange   document.Given[quantity.TemperatureRise] `key:"temperature_change" range:">= 0 K, <= 100 K" means:"by how much the air at the parts changes during one exposure" example:"1 K"`
+	PollutionDegree     document.Given[int]                      `key:"pollution_degree" range:">= 1, <= 4" means:"pollution degree (IEC 60664-1)" example:"2"`
+	Mains               document.Given[quantity.Voltage]         `key:"mains" range:"> 0 V, <= 1000 V" means:"mains voltage, rms" example:"230 V"`
+	MainsFrequency      document.Given[quantity.Frequency]       `key:"mains_frequency" range:"> 0 Hz, <= 1 kHz" means:"mains frequency" example:"50 Hz"`
+	OvervoltageCategory document.Given[int]                      `key:"overvoltage_category" range:">= 1, <= 4" means:"overvoltage category (IEC 60664-1)" example:"2"`
 }
 
 // Drive feeds the multiplier.
@@ -79,7 +80,9 @@ type Drive struct {
 // Regulation holds the sensed node at its set value.
 type Regulation struct {
 	document.Table
-	Set document.Given[quantity.Voltage] `key:"set" range:"> 0 V, <= 1 MV" needed:"yes" means:"voltage held at the node the divider senses, magnitude" example:"20 kV"`
+	Set                    document.Given[quantity.Voltage]   `key:"set" range:"> 0 V, <= 1 MV" needed:"yes" means:"voltage held at the node the divider senses, magnitude" example:"20 kV"`
+	TemperatureCoefficient document.Given[quantity.PerKelvin] `key:"temperature_coefficient" range:">= -1 %/K, <= 1 %/K" means:"relative change of the reference and its amplifier per kelvin" example:"10 ppm/K"`
+	Stability              document.Given[quantity.Fraction]  `key:"stability" range:">= 0 %, <= 10 %" means:"relative drift of reference and amplifier over one exposure at even temperature, peak to peak" example:"20 ppm"`
 }
 
 // Filter is one section between multiplier and supply terminal.

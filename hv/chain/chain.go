@@ -51,6 +51,8 @@ type Chain struct {
 	Spacings   []Spacing   `key:"spacing" means:"a gap with its surfaces"`
 	Parts      []Part      `key:"part" means:"anything else between two nodes"`
 	Fields     []Field     `key:"field" means:"axisymmetric arrangement of electrodes and dielectrics"`
+
+	Feedthroughs []Feedthrough `key:"feedthrough" means:"conductor through the hole of a plate"`
 }
 
 // Site is where the chain stands.

@@ -11,7 +11,7 @@ import (
 
 // checks are all checks across keys. Each finds nothing in a sound description.
 var checks = []Check{
-	{"purpose", "there is something to review: a multiplier, a spacing or a field", checkPurpose},
+	{"purpose", "there is something to review: a multiplier, a spacing, a feedthrough or a field", checkPurpose},
 	{"multiplier", "what hangs on the multiplier has one, and the multiplier has a drive", checkMultiplier},
 	{"stages", "a list of capacitances has one value, or one a stage", checkStages},
 	{"drive", "the limit of the drive is not below its peak, and only halves have an unbalance", checkDrive},
@@ -24,14 +24,15 @@ var checks = []Check{
 	{"part", "a loose part has the values of its kind", checkParts},
 	{"target", "a shield stands before a target that is described", checkTargets},
 	{"spacing", "a spacing lies between two nodes or stands a stated voltage", checkSpacings},
+	{"feedthrough", "the parts of a feedthrough go into each other, and its pin is at a node or a stated voltage", checkFeedthroughs},
 	{"shape", "a shape has the sizes of its kind, and they agree with the clearance", checkShapes},
 	{"electrode", "an electrode has the potential of a node or a fixed one", checkElectrodes},
 	{"profile", "a profile starts at a point and goes on by lines and arcs", checkProfiles},
 }
 
 func checkPurpose(s *survey) {
-	if s.without(s.Multiplier != nil) && s.without(len(s.Spacings) > 0) && s.without(len(s.Fields) > 0) {
-		s.fault(s.Here(), "there is nothing to review", "describe [drive] and [multiplier], a [[spacing]] or a [[field]]")
+	if s.without(s.Multiplier != nil) && s.without(len(s.Spacings) > 0) && s.without(len(s.Feedthroughs) > 0) && s.without(len(s.Fields) > 0) {
+		s.fault(s.Here(), "there is nothing to review", "describe [drive] and [multiplier], a [[spacing]], a [[feedthrough]] or a [[field]]")
 	}
 }
 

@@ -42,6 +42,12 @@ func (s *survey) chainNodes() {
 		s.node(sp.To)
 		s.eachNode(sp.Also)
 	}
+	for i := range s.Feedthroughs {
+		f := &s.Feedthroughs[i]
+		s.node(f.Node)
+		s.node(f.To)
+		s.eachNode(f.Also)
+	}
 	for i := range s.Fields {
 		for j := range s.Fields[i].Electrodes {
 			s.node(s.Fields[i].Electrodes[j].Node)
@@ -135,6 +141,7 @@ func checkNames(s *survey) {
 	s.distinct("load", names(s.Loads, func(l *Load) document.Given[string] { return l.Name }))
 	s.distinct("part", parts)
 	s.distinct("spacing", names(s.Spacings, func(sp *Spacing) document.Given[string] { return sp.Name }))
+	s.distinct("feedthrough", names(s.Feedthroughs, func(f *Feedthrough) document.Given[string] { return f.Name }))
 	s.distinct("target", names(s.Targets, func(t *Target) document.Given[string] { return t.Name }))
 	s.distinct("shield", names(s.Shields, func(sh *Shield) document.Given[string] { return sh.Name }))
 	s.distinct("field", names(s.Fields, func(f *Field) document.Given[string] { return f.Name }))

@@ -64,13 +64,26 @@ var sizesOf = map[string][]string{
 
 func checkShapes(s *survey) {
 	for i := range s.Spacings {
-		sp := &s.Spacings[i]
-		if sp.Shape == nil || !s.sound(sp.Shape.Kind.Place) {
-			continue
-		}
-		s.shapeSizes(sp.Shape)
-		s.shapeGap(sp)
+		s.shapeOf(s.Spacings[i].Shape, s.Spacings[i].Clearance)
 	}
+	for i := range s.Feedthroughs {
+		f := &s.Feedthroughs[i]
+		if f.AirSide != nil {
+			s.shapeOf(f.AirSide.Shape, f.AirSide.Clearance)
+		}
+		if f.VacuumSide != nil {
+			s.shapeOf(f.VacuumSide.Shape, f.VacuumSide.Length)
+		}
+	}
+}
+
+// shapeOf judges a shape beside its clearance.
+func (s *survey) shapeOf(sh *Shape, clearance document.Given[quantity.Length]) {
+	if sh == nil || !s.sound(sh.Kind.Place) {
+		return
+	}
+	s.shapeSizes(sh)
+	s.shapeGap(sh, clearance)
 }
 
 func (s *survey) shapeSizes(sh *Shape) {
@@ -98,9 +111,9 @@ func orNone(words []string) string {
 }
 
 // shapeGap holds the radii of a coaxial or spherical gap against its clearance.
-func (s *survey) shapeGap(sp *Spacing) {
-	inner, outer := sp.Shape.InnerRadius, sp.Shape.OuterRadius
-	if len(sizesOf[sp.Shape.Kind.V]) != 2 || !s.sound(inner.Place) || !s.sound(outer.Place) {
+func (s *survey) shapeGap(sh *Shape, clearance document.Given[quantity.Length]) {
+	inner, outer := sh.InnerRadius, sh.OuterRadius
+	if len(sizesOf[sh.Kind.V]) != 2 || !s.sound(inner.Place) || !s.sound(outer.Place) {
 		return
 	}
 	if quantity.AtLeast(inner.V, outer.V) {
@@ -108,8 +121,8 @@ func (s *survey) shapeGap(sp *Spacing) {
 		return
 	}
 	gap := outer.V - inner.V
-	if s.sound(sp.Clearance.Place) && !near(gap, sp.Clearance.V) {
-		s.fault(sp.Clearance.Place, "the radii of the shape leave a gap of "+quantity.Text(gap), "the clearance is the outer less the inner radius, within 1 %")
+	if s.sound(clearance.Place) && !near(gap, clearance.V) {
+		s.fault(clearance.Place, "the radii of the shape leave a gap of "+quantity.Text(gap), "the clearance is the outer less the inner radius, within 1 %")
 	}
 }
 

@@ -28,6 +28,9 @@ var draftOn = []string{"format", "title", "site", "drive", "multiplier", "load",
 var draftOther = []string{
 	"drive.unbalance", "load.resistance", "bias.voltage", "spacing.voltage", "field.electrodes.voltage",
 	"spacing.shape.radius", "spacing.shape.tip_radius", "spacing.shape.edge_radius", "spacing.shape.earthed",
+	"feedthrough.voltage",
+	"feedthrough.air_side.shape.radius", "feedthrough.air_side.shape.tip_radius", "feedthrough.air_side.shape.edge_radius", "feedthrough.air_side.shape.earthed",
+	"feedthrough.vacuum_side.shape.radius", "feedthrough.vacuum_side.shape.tip_radius", "feedthrough.vacuum_side.shape.edge_radius", "feedthrough.vacuum_side.shape.earthed",
 	"part.resistance", "part.forward_drop", "part.capacitance", "part.leakage",
 }
 

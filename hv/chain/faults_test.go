@@ -29,7 +29,7 @@ supply = "dc"
 
 // faulty are documents whose comments say what is wrong across their keys.
 var faulty = map[string]string{
-	"nothing to review": `format = 1  # FAULT 1 purpose: there is nothing to review; describe [drive] and [multiplier], a [[spacing]] or a [[field]]
+	"nothing to review": `format = 1  # FAULT 1 purpose: there is nothing to review; describe [drive] and [multiplier], a [[spacing]], a [[feedthrough]] or a [[field]]
 #^ a site is no chain
 [site]
 altitude = "240 m"
@@ -436,6 +436,52 @@ name = "f"
 voltage = "20 kV"
 medium = "air"
 shape = { kind = "point-plane", tip_radius = "300" } # FAULT 46 quantity: spacing.shape.tip_radius: "300": a number without a unit
+`,
+	"feedthroughs": whole + `
+[[feedthrough]]
+name = "a"
+node = "cathode"
+voltage = "20 kV"      # FAULT 11 feedthrough: feedthrough.voltage: both a node and a voltage; keep one of the two
+plate_thickness = "3 mm"
+pin = { radius = "3 mm" }
+hole = { radius = "20 mm", edge_radius = "4 mm" } # FAULT 42 feedthrough: feedthrough.hole.edge_radius: the edge is rounded by more than the plate is thick: 3 mm
+sleeve = { material = "alumina", inner_radius = "2.5 mm", outer_radius = "21 mm" } # FAULT 49 feedthrough: feedthrough.sleeve.inner_radius: the pin of 3 mm does not go into the sleeve # FAULT 74 feedthrough: feedthrough.sleeve.outer_radius: the sleeve does not go into the hole of 20 mm
+air_side = { length = "60 mm", clearance = "60 mm", creepage = "50 mm" } # FAULT 64 feedthrough: feedthrough.air_side.creepage: the way along the surface is shorter than the clearance of 60 mm
+[[feedthrough]]        # FAULT 1 feedthrough: feedthrough: neither a node nor a voltage; give node, or voltage # FAULT 1 feedthrough: feedthrough: air on one side and vacuum on the other, and no sleeve between; describe sleeve
+name = "b"
+pin = { radius = "3 mm" }
+hole = { radius = "3 mm" } # FAULT 19 feedthrough: feedthrough.hole.radius: the hole is not wider than the pin: 3 mm against 3 mm
+air_side = { length = "60 mm" }
+vacuum_side = { length = "60 mm", tested_voltage = "30 kV" } # FAULT 52 feedthrough: feedthrough.vacuum_side.tested_voltage: a tested voltage without the tested length; give tested_length
+[[feedthrough]]
+name = "c"
+node = "ground"        # FAULT 8 feedthrough: feedthrough.node: pin and plate on the same node; name the node of the pin
+pin = { radius = "3 mm" }
+hole = { radius = "13 mm" }
+sleeve = { material = "alumina", inner_gap = "air", outer_gap = "vacuum", tested_thickness = "1 mm" } # FAULT 46 feedthrough: feedthrough.sleeve.inner_gap: no gap between pin and sleeve to fill # FAULT 65 feedthrough: feedthrough.sleeve.outer_gap: no gap between sleeve and hole to fill # FAULT 94 feedthrough: feedthrough.sleeve.tested_thickness: a tested thickness without the strength
+vacuum_side = { length = "60 mm", tested_length = "30 mm" } # FAULT 51 feedthrough: feedthrough.vacuum_side.tested_length: a tested length without the tested voltage
+strip = { length = "80 mm" } # FAULT 9 feedthrough: feedthrough.strip: a bared cable without a side in air
+[[feedthrough]]        # FAULT 1 feedthrough: feedthrough: a feedthrough without a side; describe air_side, vacuum_side or both
+name = "c"             # FAULT 8 name: feedthrough.name: a second feedthrough named "c"
+node = "cathod"        # FAULT 8 node: feedthrough.node: "cathod" is no node of this chain
+pin = { radius = "3 mm" }
+hole = { radius = "13 mm" }
+sleeve = { material = "alumina", inner_radius = "8 mm", outer_radius = "8 mm" } # FAULT 72 feedthrough: feedthrough.sleeve.outer_radius: the sleeve has no wall: 8 mm against 8 mm
+[[feedthrough]]
+name = "d"
+voltage = "20 kV"
+to = "ground"          # FAULT 6 feedthrough: feedthrough.to: the node of the plate beside a stated voltage
+pin = { radius = "3 mm" }
+hole = { radius = "13 mm" }
+air_side = { length = "60 mm", shape = { kind = "coaxial", radius = "3 mm" } } # FAULT 40 shape: without inner_radius # FAULT 40 shape: without outer_radius # FAULT 69 shape: feedthrough.air_side.shape.radius: no size of a shape
+`,
+	"feedthrough without multiplier": `format = 1
+[[feedthrough]]
+name = "a"
+node = "cathode"       # FAULT 8 feedthrough: feedthrough.node: without a multiplier nothing tells the voltage of a node
+pin = { radius = "3 mm" }
+hole = { radius = "13 mm" }
+air_side = { length = "60 mm", ribs = { count = 3, depth = "5 mm", width = "4 mm" }, creepage = "40 mm" } # FAULT 97 feedthrough: feedthrough.air_side.creepage: the way over the ribs is shorter than the straight one of 60 mm
 `,
 	"parts": whole + `
 [[part]]               # FAULT 1 part: part: a resistor without a value; give its resistance, as in value = "4.7 Mohm"

@@ -10,12 +10,19 @@ import (
 func curves(e *evidence.Evidence) []exhibit.Curve {
 	return gather(e,
 		waveforms,
+		nodeWaveforms,
+		diodeWaveforms,
 	)
 }
 
 // tables lists every table of a review in the order of print.
 func tables(e *evidence.Evidence) []exhibit.Table {
 	return gather(e,
+		closedForm,
+		dropByCause,
+		stageVoltages,
+		diodeTable,
+		ripples,
 		losses,
 	)
 }

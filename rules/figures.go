@@ -19,6 +19,7 @@ func figures(e *evidence.Evidence) []figure.Figure {
 			output(c, in)
 			divider(c, in)
 			stored(c, in)
+			elements(c, in)
 		}
 		c.state = evidence.Working
 		beam(c, e)

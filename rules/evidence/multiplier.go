@@ -24,13 +24,16 @@ func (e *Evidence) NoLoad() (quantity.Voltage, error) {
 // MultiplierMean is the magnitude of the mean at the top of the smoothing column.
 func (e *Evidence) MultiplierMean() (quantity.Voltage, error) {
 	v, err := e.Potential("multiplier")
+	if err != nil {
+		return 0, err
+	}
 	if e.chain.Multiplier.Negative() {
 		v = -v
 	}
-	if err == nil && v < 0 {
+	if v < 0 {
 		return 0, lack.Range("the load pulls the output through zero: the multiplier cannot feed it")
 	}
-	return v, err
+	return v, nil
 }
 
 // MultiplierMinimum is the smallest magnitude at the top of the smoothing column;
@@ -43,6 +46,9 @@ func (e *Evidence) MultiplierMinimum() (quantity.Voltage, error) {
 // Drop is what the mean lies below no load, and why.
 type Drop struct {
 	Total, Load, Stray, Source quantity.Voltage
+	// Ripple at the top, peak to peak, of the circuit without what opposes the drive, and
+	// of that without strays as well: what the closed form is to be compared with.
+	RippleStiff, RippleIdeal quantity.Voltage
 	// Split is the reason why the drop could not be split; nil where it was.
 	Split error
 }
@@ -79,19 +85,19 @@ func (e *Evidence) split(d *Drop, mean quantity.Voltage) error {
 	if err != nil {
 		return err
 	}
-	d.Source, d.Stray = withStrays-mean, ideal-withStrays
+	d.Source, d.Stray = magnitude(withStrays.Mean)-mean, magnitude(ideal.Mean)-magnitude(withStrays.Mean)
+	d.RippleStiff, d.RippleIdeal = withStrays.PeakToPeak(), ideal.PeakToPeak()
 	d.Load = d.Total - d.Source - d.Stray
 	return nil
 }
 
-// topOf is the magnitude of the mean at the top of an edited circuit.
-func (e *Evidence) topOf(c *circuit.Circuit) (quantity.Voltage, error) {
+// topOf is how the top of an edited circuit moves.
+func (e *Evidence) topOf(c *circuit.Circuit) (network.Swing, error) {
 	p, err := e.solve(c, nil)
 	if err != nil {
-		return 0, err
+		return network.Swing{}, err
 	}
-	s, err := p.between("multiplier", "ground")
-	return magnitude(s.Mean), err
+	return p.between("multiplier", "ground")
 }
 
 // stiffDrive takes away what stands in series with the drive and in the diodes.

@@ -1,8 +1,6 @@
 package evidence
 
 import (
-	"math"
-
 	"kilovet/hv/circuit"
 	"kilovet/hv/lack"
 	"kilovet/hv/quantity"
@@ -53,7 +51,7 @@ func (p periodic) between(node, reference string) (network.Swing, error) {
 	return p.Between(a, b)
 }
 
-// rms of the voltage between two nodes, straight between the points of its wave-form.
+// rms of the voltage between two nodes.
 func (p periodic) rms(node, reference string) (quantity.Voltage, error) {
 	a, err := p.node(node)
 	if err != nil {
@@ -63,19 +61,7 @@ func (p periodic) rms(node, reference string) (quantity.Voltage, error) {
 	if err != nil {
 		return 0, err
 	}
-	points, err := p.Wave(a, b)
-	if err != nil {
-		return 0, err
-	}
-	if len(points) < 2 {
-		return 0, lack.Failed("there is no wave-form between %s and %s", node, reference)
-	}
-	sum, length := 0.0, float64(points[len(points)-1].Time-points[0].Time)
-	for i, x := range points[1:] {
-		v, w, dt := float64(points[i].Voltage), float64(x.Voltage), float64(x.Time-points[i].Time)
-		sum += dt * (v*v + v*w + w*w) / 3
-	}
-	return quantity.Voltage(math.Sqrt(sum / length)), nil
+	return p.RMS(a, b)
 }
 
 func (p periodic) harmonic(node, reference string, k int) (complex128, error) {

@@ -23,6 +23,12 @@ type Line struct {
 	Cathode, Bias complex128
 }
 
+// AtCathode is the amplitude at the cathode.
+func (l Line) AtCathode() quantity.Voltage { return quantity.Voltage(cmplx.Abs(l.Cathode)) }
+
+// AcrossBias is the amplitude across the bias.
+func (l Line) AcrossBias() quantity.Voltage { return quantity.Voltage(cmplx.Abs(l.Bias)) }
+
 // DriveLines are drive frequency and harmonics at the cathode: those of the
 // multiplier through filter, cable, bias and floating supply, and what strays pick up.
 func (e *Evidence) DriveLines() ([]Line, error) {

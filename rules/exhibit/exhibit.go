@@ -33,6 +33,9 @@ type Curve struct {
 	Levels  []Level
 	Basis   string // how it was obtained
 	Note    string // what a reader must know; may be empty
+	// Detail marks what is for whoever looks closely: a renderer short of room may leave
+	// it out, JSON never does.
+	Detail bool
 }
 
 // Axis is what is laid off along one side of a curve.

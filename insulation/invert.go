@@ -99,10 +99,14 @@ func overGaps(g gap.Gap, want float64, answer func(gap.Gap) (float64, error)) (q
 	if err != nil && (g.Medium == gap.Air || g.Medium == gap.InGas) {
 		return 0, err
 	}
+	law := func(d float64) (float64, error) { return answer(withGap(g, quantity.Length(d))) }
 	shortest, longest := reachOf(g, s)
-	return crossingOf(shortest, longest, want, func(d float64) (float64, error) {
-		return answer(withGap(g, quantity.Length(d)))
-	})
+	if g.Medium != gap.Air && g.Medium != gap.InGas {
+		if shortest, longest, err = answered(shortest, longest, law); err != nil {
+			return 0, err
+		}
+	}
+	return crossingOf(shortest, longest, want, law)
 }
 
 // overRadii finds the sharpest radius at which a rising answer takes a value.

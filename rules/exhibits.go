@@ -24,6 +24,7 @@ func tables(e *evidence.Evidence) []exhibit.Table {
 		diodeTable,
 		ripples,
 		losses,
+		distances,
 	)
 }
 

@@ -145,6 +145,11 @@ func (r *reviewing) review(given source) (*rules.Review, error) {
 		}
 		return nil, exitf(unusable, "%s in %s; nothing was written", plural(len(faults), "fault"), given.name)
 	}
+	return r.reviewOf(c, given)
+}
+
+// reviewOf runs the rules on a description that was read without faults.
+func (r *reviewing) reviewOf(c *chain.Chain, given source) (*rules.Review, error) {
 	sum := sha256.Sum256(given.data)
 	inputs := []rules.Input{{Role: "description", Name: filepath.Base(given.name), SHA256: hex.EncodeToString(sum[:])}}
 	return rules.Run(c, inputs, rules.Program{Name: "kilovet", Version: version()}), nil

@@ -15,6 +15,7 @@ import (
 	"github.com/spf13/cobra"
 
 	"kilovet"
+	"kilovet/hv/chain"
 	"kilovet/reports/digest"
 	"kilovet/reports/json"
 	"kilovet/reports/page"

@@ -11,6 +11,7 @@ import (
 
 	"kilovet/hv/chain"
 	"kilovet/hv/document"
+	"kilovet/rules"
 )
 
 // gapFlags are the keys of a spacing and its site as flags.
@@ -182,7 +183,7 @@ func (g *gapFlags) read(block []byte, flags []string) (*chain.Chain, []string) {
 			told = append(told, fmt.Sprintf("--%s: not given; %s, as in --%s %s", flagName(d), meaning(d), flagName(d), example(d)))
 		}
 	}
-	c, faults := chain.Read(block)
+	c, faults := rules.Read(block)
 	for _, f := range faults {
 		flag := flags[min(max(f.Line, 1), len(flags))-1]
 		if flag == "" {

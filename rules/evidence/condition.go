@@ -4,11 +4,7 @@
 // computed it remembers for one review.
 package evidence
 
-import (
-	"strings"
-
-	"kilovet/hv/circuit"
-)
+import "strings"
 
 // State of a chain.
 type State string
@@ -37,12 +33,6 @@ const (
 
 // Corners lists them.
 var Corners = []Corner{Nominal, AllLow, AllHigh}
-
-// Fault is a change of the circuit.
-type Fault struct {
-	Name string
-	Edit func(*circuit.Circuit) *circuit.Circuit
-}
 
 // Condition is what a chain is computed under.
 type Condition struct {

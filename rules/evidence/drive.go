@@ -13,6 +13,10 @@ import (
 // set voltage, as far as the drive goes; with regulation lost the limit.
 func (e *Evidence) Peak() (quantity.Voltage, error) {
 	return remember(e, "peak", func() (quantity.Voltage, error) {
+		if e.failed() {
+			f, err := e.failure()
+			return f.peak, err
+		}
 		peak, err := e.fullPeak()
 		if d := e.condition.Drive; d != 0 {
 			peak *= quantity.Voltage(d)
@@ -135,6 +139,10 @@ func (e *Evidence) Circuit() (*circuit.Circuit, error) {
 		return nil, lack.Key("drive", "multiplier")
 	}
 	return remember(e, "circuit", func() (*circuit.Circuit, error) {
+		if e.failed() {
+			f, err := e.failure()
+			return f.Circuit, err
+		}
 		peak, err := e.Peak()
 		if err != nil {
 			return nil, err
@@ -151,6 +159,11 @@ func (e *Evidence) circuitAt(peak quantity.Voltage) (*circuit.Circuit, error) {
 	c := circuit.Build(e.chain, circuit.Setting{Peak: peak, Emission: emission, Corner: e.corner()})
 	if e.condition.Fault.Edit != nil {
 		c = e.condition.Fault.Edit(c)
+	}
+	if e.failed() {
+		if c, err = e.withBias(c); err != nil {
+			return nil, err
+		}
 	}
 	return c, ladderDoubt(c)
 }

@@ -21,6 +21,10 @@ func (e *Evidence) Emission() (quantity.Current, error) {
 	if m := e.chain.Multiplier; m != nil && !m.Negative() {
 		return 0, lack.Range("an electron gun on a positive supply: its cathode is not below its earthed anode")
 	}
+	if e.failed() {
+		p, err := e.gunInFault()
+		return p.emission, err
+	}
 	if g.Emission.Set() {
 		return g.Emission.V, nil
 	}

@@ -15,6 +15,10 @@ const Basis = "ripple.network"
 // drive ended with, or one found from that of the nominal chain, which is near.
 func (e *Evidence) solution() (periodic, error) {
 	return remember(e, "solution", func() (periodic, error) {
+		if e.failed() {
+			f, err := e.failure()
+			return periodic{f.Periodic}, err
+		}
 		c, err := e.Circuit()
 		if err != nil {
 			return periodic{}, err
@@ -114,8 +118,16 @@ func (e *Evidence) swing(a, b string) (network.Swing, error) {
 
 // ElementPeak is the largest magnitude of the voltage across an element.
 func (e *Evidence) ElementPeak(name string) (quantity.Voltage, error) {
-	from, to := e.Layout().Element(name).Ends()
+	from, to := e.ends(name)
 	return e.Between(from, to)
+}
+
+// ends are the nodes between which an element stands, or stood before a fault took it out.
+func (e *Evidence) ends(name string) (from, to string) {
+	if c, err := e.Circuit(); err == nil && c.Element(name) != nil {
+		return c.Element(name).Ends()
+	}
+	return e.Layout().Element(name).Ends()
 }
 
 // ElementCurrent is the magnitude of the mean current through a resistor or load.
@@ -125,7 +137,7 @@ func (e *Evidence) ElementCurrent(name string) (quantity.Current, error) {
 		return 0, err
 	}
 	if s.Circuit.Element(name) == nil {
-		return 0, lack.Failed("there is no %s", name)
+		return 0, e.absent(name)
 	}
 	f, err := s.Through(name)
 	return quantity.Current(math.Abs(float64(f.Mean))), err
@@ -136,6 +148,9 @@ func (e *Evidence) ElementPower(name string) (quantity.Power, error) {
 	s, err := e.solution()
 	if err != nil {
 		return 0, err
+	}
+	if s.Circuit.Element(name) == nil {
+		return 0, e.absent(name)
 	}
 	return s.Power(name), nil
 }
@@ -164,7 +179,16 @@ func (e *Evidence) diode(name string) (network.DiodeFigures, error) {
 		return network.DiodeFigures{}, err
 	}
 	if s.Circuit.Element(name) == nil {
-		return network.DiodeFigures{}, lack.Failed("there is no diode %s", name)
+		return network.DiodeFigures{}, e.absent(name)
 	}
 	return s.Diode(name), nil
+}
+
+// absent is the error for an element that is not in the circuit: none where a fault took
+// it out, for it then bears nothing.
+func (e *Evidence) absent(name string) error {
+	if e.failed() && e.Layout().Element(name) != nil {
+		return nil
+	}
+	return lack.Failed("there is no %s", name)
 }

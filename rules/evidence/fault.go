@@ -1,0 +1,187 @@
+package evidence
+
+import (
+	"math"
+
+	"kilovet/hv/circuit"
+	"kilovet/hv/lack"
+	"kilovet/hv/quantity"
+	"kilovet/ripple/network"
+)
+
+// Fault is a change of the circuit, and how the regulation answers it.
+type Fault struct {
+	Name string
+	Edit func(*circuit.Circuit) *circuit.Circuit
+	Loop Loop
+}
+
+// Loop is how the regulation answers a fault.
+type Loop int
+
+// The answers of the regulation.
+const (
+	Held     Loop = iota // it goes on holding the true voltage: a thought, not a failure
+	Reads                // it holds what its divider reads, as far as the drive goes
+	RunsAway             // it does not work: the drive goes to its limit
+)
+
+// failed reports whether something has failed under the condition.
+func (e *Evidence) failed() bool { return e.condition.Fault.Loop != Held }
+
+// Healthy is the evidence under the same condition without the fault.
+func (e *Evidence) Healthy() *Evidence {
+	c := e.condition
+	c.Fault = Fault{}
+	return e.Under(c)
+}
+
+// failure is where a chain comes to rest with a fault.
+type failure struct {
+	network.Settled
+	peak quantity.Voltage
+	// Circuit is the circuit at rest, with what has struck or ended.
+	Circuit *circuit.Circuit
+}
+
+func (e *Evidence) failure() (failure, error) {
+	return remember(e, "failure", func() (failure, error) {
+		if !e.HasSupply() {
+			return failure{}, lack.Key("drive", "multiplier")
+		}
+		if e.holds() && e.condition.Fault.Loop == Reads {
+			return e.regulated()
+		}
+		peak, err := e.unregulated()
+		if err != nil {
+			return failure{}, err
+		}
+		return e.settle(peak, e.alike())
+	})
+}
+
+// unregulated is the peak of a drive that no regulation moves.
+func (e *Evidence) unregulated() (quantity.Voltage, error) {
+	share := e.condition.Drive
+	if e.condition.Fault.Loop == RunsAway && (share == 0 || share == 1) {
+		return e.limit()
+	}
+	return e.Healthy().Peak()
+}
+
+// settle is where the chain comes to rest at a drive.
+func (e *Evidence) settle(peak quantity.Voltage, from *network.Periodic) (failure, error) {
+	c, err := e.circuitAt(peak)
+	if err != nil {
+		return failure{}, err
+	}
+	s, err := network.Settle(trusted(c), network.Options{Frequency: e.chain.Drive.Frequency.V, From: from})
+	if err != nil {
+		return failure{}, err
+	}
+	return failure{s, peak, s.Circuit}, nil
+}
+
+// regulated is where the regulation comes to rest: where its divider reads what it read
+// before, or at the limit of the drive where that is not enough.
+func (e *Evidence) regulated() (failure, error) {
+	const good = 1e-6
+	wanted, peak, err := e.wanted()
+	if err != nil {
+		return failure{}, err
+	}
+	at, err := e.settle(peak, e.alike())
+	if err != nil {
+		return failure{}, err
+	}
+	low, high := failure{}, failure{} // the nearest that read too little and too much
+	var under, over quantity.Voltage
+	for range mostTrials {
+		read := e.read(at)
+		if quantity.AtMost(math.Abs(float64(read/wanted-1)), good) {
+			return at, nil
+		}
+		if read < wanted {
+			if limit, err := e.limit(); err == nil && quantity.AtLeast(at.peak, limit) {
+				return at, nil
+			}
+			low, under = at, read
+		} else {
+			high, over = at, read
+		}
+		if low.peak > 0 && high.peak > 0 && quantity.AtMost(float64(high.peak/low.peak-1), good) {
+			return low, nil // it reads too much with a little more: what strikes keeps it there
+		}
+		next, err := e.next(at, read, wanted, low.peak, under, high.peak, over)
+		if err != nil {
+			return failure{}, err
+		}
+		if at, err = e.settle(next, at.Periodic); err != nil {
+			return failure{}, err
+		}
+	}
+	return failure{}, lack.Failed("the regulation does not come to rest")
+}
+
+// mostTrials is how many drives are tried until the regulation is at rest.
+const mostTrials = 40
+
+// next is the drive to try next: in proportion at first, then between the nearest ones.
+func (e *Evidence) next(at failure, read, wanted, low, under, high, over quantity.Voltage) (quantity.Voltage, error) {
+	if low > 0 && high > 0 {
+		p := low + (wanted-under)*(high-low)/(over-under)
+		edge := (high - low) / 20
+		return min(max(p, low+edge), high-edge), nil
+	}
+	if read > wanted {
+		return at.peak * max(wanted/read, 0.1), nil
+	}
+	limit, err := e.limit()
+	if err != nil {
+		return 0, err
+	}
+	if read <= 0 || at.peak*wanted/read > limit {
+		return limit, nil
+	}
+	return min(limit, at.peak*(1+1.02*(wanted/read-1))), nil
+}
+
+// wanted is what the regulation wants to read at the tap, and the drive it begins with.
+func (e *Evidence) wanted() (reading, peak quantity.Voltage, err error) {
+	healthy := e.Healthy()
+	if peak, err = healthy.Peak(); err != nil {
+		return 0, 0, err
+	}
+	p, err := healthy.solution()
+	if err != nil {
+		return 0, 0, err
+	}
+	s, err := p.between("divider.tap", "ground")
+	return magnitude(s.Mean), peak, err
+}
+
+// read is what the regulation reads: the mean at the tap, negative where the polarity is
+// the wrong one.
+func (e *Evidence) read(f failure) quantity.Voltage {
+	s, err := periodic{f.Periodic}.between("divider.tap", f.Circuit.Reference())
+	if err != nil {
+		return 0
+	}
+	if e.chain.Multiplier.Negative() {
+		return -s.Mean
+	}
+	return s.Mean
+}
+
+// Struck are the gaps and clamps that a fault makes conduct, Ended the constant currents
+// that it ends.
+func (e *Evidence) Struck() ([]string, error) {
+	f, err := e.failure()
+	return f.Struck, err
+}
+
+// Ended are the constant currents that a fault ends.
+func (e *Evidence) Ended() ([]string, error) {
+	f, err := e.failure()
+	return f.Ended, err
+}

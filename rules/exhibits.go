@@ -25,6 +25,7 @@ func tables(e *evidence.Evidence) []exhibit.Table {
 		ripples,
 		losses,
 		distances,
+		arcTables,
 	)
 }
 

@@ -21,6 +21,8 @@ func figures(e *evidence.Evidence) []figure.Figure {
 			stored(c, in)
 			elements(c, in)
 		}
+		c.state = evidence.Lost
+		arcs(c, e.In(evidence.Lost))
 		c.state = evidence.Working
 		beam(c, e)
 		c.state = ""

@@ -98,28 +98,6 @@ func (e *Evidence) IsGround(node string) bool {
 	return ok && n == circuit.Ground
 }
 
-// ArcVoltage is the voltage that an arc at the gun puts across a series resistor:
-// the full voltage of its end away from the gun, or what a clamp across it lets stand.
-func (e *Evidence) ArcVoltage(resistor string) (quantity.Voltage, error) {
-	if resistor == "bias.resistor" && e.chain.Bias.Clamp != nil {
-		return e.chain.Bias.Clamp.Voltage.V, nil
-	}
-	from, to := e.Layout().Element(resistor).Ends()
-	a, err := e.Between(from, "ground")
-	if err != nil {
-		return 0, err
-	}
-	b, err := e.Between(to, "ground")
-	return max(a, b), err
-}
-
-// ArcEnergy is the most that an arc at the gun can turn into heat in a series
-// resistor: all that a short at the output releases.
-func (e *Evidence) ArcEnergy(string) (quantity.Energy, error) {
-	s, err := e.ShortAt("output")
-	return s.Energy, err
-}
-
 // measuring is the resistance through which a touch current is measured (IEC 60335-1,
 // EN 50191: 2 kohm).
 const measuring quantity.Resistance = 2e3

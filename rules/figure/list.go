@@ -111,6 +111,15 @@ var List = []Declaration{
 	{"stored.left", "V", true, "largest voltage that stays on a node with one part open", "part"},
 	{"stored.residue", "V", false, "what an intact ladder keeps: (2 N − 1) forward drops", ""},
 
+	{"arc.charge", "C", true, "stored charge that passes through an arc to ground, regulation lost", "node"},
+	{"arc.energy", "J", true, "stored energy that the arc itself turns into heat", "node"},
+	{"arc.ceases", "s", true, "until the current of the arc stays below 1 mA, drive on", "node"},
+	{"arc.ceases_undriven", "s", true, "until the current of the arc stays below 1 mA, drive off", "node"},
+	{"arc.follow_current", "A", true, "mean current that the drive feeds into an arc that stands", "node"},
+	{"arc.part_voltage", "V", true, "largest voltage that an arc at the gun puts across a part", "part"},
+	{"arc.part_current", "A", true, "largest current that an arc at the gun drives through a part", "part"},
+	{"arc.part_energy", "J", true, "energy that an arc at the gun turns into heat in a part", "part"},
+
 	{"spacing.voltage", "V", false, "highest voltage across the spacing, peak", "spacing"},
 	{"spacing.clearance_needed", "m", false, "clearance needed", "spacing"},
 	{"spacing.creepage_needed", "m", false, "creepage distance needed", "spacing"},

@@ -32,8 +32,8 @@ var (
 	SinglePulse       = Derating{0.80, 1.00, practice("a single arc at most the single-pulse rating, 80 % for comfort")}
 )
 
-// ArcSource says why series resistors are judged at the full voltage and energy.
-var ArcSource = practice("an arc at the gun puts the full voltage and the stored energy into the series resistors")
+// ArcSource says why series resistors are judged by what an arc does to them.
+var ArcSource = practice("an arc at the gun drives the stored charge through the series resistors: they stand it as a single pulse")
 
 // Power of a film resistor falls linearly between these: common practice, no source.
 const (

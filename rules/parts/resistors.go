@@ -1,8 +1,6 @@
 package parts
 
 import (
-	"fmt"
-
 	"kilovet/hv/circuit"
 	"kilovet/hv/lack"
 	"kilovet/hv/quantity"
@@ -84,77 +82,4 @@ func ambientShare(e *evidence.Evidence) (float64, error) {
 	}
 	share := float64((limits.NoPowerAbove - t) / (limits.NoPowerAbove - limits.FullPowerTo))
 	return min(1, share), nil
-}
-
-var arcVoltage = rule.Rule{
-	ID: "series.arc_voltage", Title: "Series resistors in an arc: voltage",
-	Demands: "Each series resistor between stored charge and gun stands the full voltage of the chain as a single pulse.",
-	Applies: "Filter, gun-end and bias resistors; an arc at the gun puts the full voltage across them. A clamp across the bias resistor limits it.",
-	Margin:  "marginal above 80 % of the single-pulse rating",
-	Concern: rule.Equipment,
-	Sources: []rule.Source{limits.ArcSource, limits.SinglePulse.Source},
-	Example: rule.Example{
-		Swaps:   []rule.Swap{{Was: `rated_pulse_voltage = "25 kV"`, Becomes: `rated_pulse_voltage = "10 kV"`}},
-		Changes: []rule.Change{{Rule: "series.arc_voltage", Subject: "cable.gun_end_resistor", Verdict: rule.Fails}},
-	},
-	Judge: func(e *evidence.Evidence) rule.Judgement {
-		return each(groups(e, isSeries), "no series resistor is described", func(g group) rule.Finding { return judgeArcVoltage(e, g) })
-	},
-}
-
-func isSeries(el circuit.Element) bool { return isResistor(el) && el.Role == circuit.Series }
-
-func judgeArcVoltage(e *evidence.Evidence, g group) rule.Finding {
-	part := ratingsOf(g.elements[0])
-	rated, pulse := part.pulseVoltage, true
-	if !rated.Set() {
-		rated, pulse = part.voltage, false
-	}
-	f := about("series.arc_voltage", rule.Equipment, g, rated.Place)
-	full := func(e *evidence.Evidence, name string) (quantity.Voltage, error) {
-		v, err := e.ArcVoltage(name)
-		return v / quantity.Voltage(part.count), err
-	}
-	r := rating[quantity.Voltage]{what: "arc voltage of each element", rated: rated.V, given: rated.Set(), key: part.pulseVoltage.Key,
-		derating: limits.SinglePulse, conditions: evidence.Ratings(), stress: full}
-	f = r.judge(e, g, f)
-	f.Sources = append(f.Sources, limits.ArcSource)
-	if !pulse && rated.Set() {
-		f.Because += fmt.Sprintf(" (no %s given: the continuous rating judges)", part.pulseVoltage.Key)
-	}
-	return f
-}
-
-var arcEnergy = rule.Rule{
-	ID: "series.arc_energy", Title: "Series resistors in an arc: energy",
-	Demands: "Each series resistor between stored charge and gun takes the energy that an arc releases.",
-	Applies: "Filter and gun-end resistors; each is judged as if it took all of it.",
-	Margin:  "marginal above 80 % of the single-pulse rating",
-	Concern: rule.Equipment,
-	Sources: []rule.Source{limits.ArcSource, limits.SinglePulse.Source},
-	Example: rule.Example{
-		Swaps:   []rule.Swap{{Was: `rated_energy = "2.5 J"`, Becomes: `rated_energy = "0.1 J"`}},
-		Changes: []rule.Change{{Rule: "series.arc_energy", Subject: "cable.gun_end_resistor", Verdict: rule.Fails}},
-	},
-	Judge: func(e *evidence.Evidence) rule.Judgement {
-		return each(groups(e, isDamping), "no filter or gun-end resistor is described", func(g group) rule.Finding { return judgeArcEnergy(e, g) })
-	},
-}
-
-// isDamping keeps the resistors that the charge of filter and cable passes in an
-// arc; the bias resistor sees what its bypass holds only.
-func isDamping(el circuit.Element) bool { return isSeries(el) && el.Name != "bias.resistor" }
-
-func judgeArcEnergy(e *evidence.Evidence, g group) rule.Finding {
-	part := ratingsOf(g.elements[0])
-	f := about("series.arc_energy", rule.Equipment, g, part.energy.Place)
-	released := func(e *evidence.Evidence, name string) (quantity.Energy, error) {
-		w, err := e.ArcEnergy(name)
-		return w / quantity.Energy(part.count*part.strings), err
-	}
-	r := rating[quantity.Energy]{what: "arc energy of each element", rated: part.energy.V, given: part.energy.Set(), key: part.energy.Key,
-		derating: limits.SinglePulse, conditions: evidence.Ratings(), stress: released}
-	f = r.judge(e, g, f)
-	f.Sources = append(f.Sources, limits.ArcSource)
-	return f
 }

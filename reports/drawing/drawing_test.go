@@ -22,9 +22,17 @@ import (
 
 var update = flag.Bool("update", false, "rewrite the golden files")
 
+func schematic(d *diagram.Diagram) (*Picture, error) {
+	pen, err := NewPen()
+	if err != nil {
+		return nil, err
+	}
+	return pen.Schematic(d), nil
+}
+
 func drawn(t testing.TB, d *diagram.Diagram) *Picture {
 	t.Helper()
-	p, err := Schematic(d)
+	p, err := schematic(d)
 	if err != nil {
 		t.Fatal(err)
 	}

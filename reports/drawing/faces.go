@@ -8,8 +8,9 @@ import (
 	"codeberg.org/go-fonts/dejavu/dejavusansbold"
 	xfont "golang.org/x/image/font"
 	"golang.org/x/image/font/opentype"
+	"golang.org/x/image/font/sfnt"
+	"golang.org/x/image/math/fixed"
 	"gonum.org/v1/plot/font"
-	"gonum.org/v1/plot/vg"
 
 	"kilovet/reports/digest"
 )
@@ -30,8 +31,12 @@ var (
 // leading is the distance of two lines of text.
 const leading = 3.4
 
-// faces measures text.
-type faces struct{ cache *font.Cache }
+// faces measures text, without kerning, which not every canvas knows.
+type faces struct {
+	cache    *font.Cache
+	advances [2]map[rune]float64 // of the regular and the bold cut, in em
+	buffer   sfnt.Buffer
+}
 
 // typeface is the name of the face under which canvases know it.
 const typeface = "DejaVu Sans"
@@ -45,7 +50,7 @@ func newFaces() (*faces, error) {
 		}
 		all = append(all, font.Face{Font: font.Font{Typeface: typeface, Variant: "Sans", Weight: weight}, Face: parsed})
 	}
-	return &faces{font.NewCache(all)}, nil
+	return &faces{cache: font.NewCache(all), advances: [2]map[rune]float64{{}, {}}}, nil
 }
 
 func (f *faces) face(t style) font.Face {
@@ -58,8 +63,40 @@ func (f *faces) face(t style) font.Face {
 
 // wide is the width of a text in millimetres.
 func (f *faces) wide(t style, text string) float64 {
-	face := f.face(t)
-	return float64(face.Width(clean(text)) / vg.Millimeter)
+	sum := 0.0
+	for _, r := range clean(text) {
+		sum += f.advance(t, r)
+	}
+	return sum * t.size
+}
+
+// advance is the width of a rune in em; of one without a glyph that of the sign for
+// it.
+func (f *faces) advance(t style, r rune) float64 {
+	known := f.advances[0]
+	if t.bold {
+		known = f.advances[1]
+	}
+	em, ok := known[r]
+	if !ok {
+		em = f.measured(t, r)
+		known[r] = em
+	}
+	return em
+}
+
+func (f *faces) measured(t style, r rune) float64 {
+	parsed := f.face(t).Face
+	units := parsed.UnitsPerEm()
+	index, err := parsed.GlyphIndex(&f.buffer, r)
+	if err != nil {
+		panic("drawing: no glyph: " + err.Error())
+	}
+	width, err := parsed.GlyphAdvance(&f.buffer, index, fixed.Int26_6(units), xfont.HintingNone)
+	if err != nil {
+		panic("drawing: no advance: " + err.Error())
+	}
+	return float64(width) / float64(units)
 }
 
 // widest is the width of the widest of some texts.
@@ -104,12 +141,12 @@ func (f *faces) wrapped(t style, name string, width float64) []string {
 
 // fits is how many runes of a text fit into a width, at least one.
 func (f *faces) fits(t style, text string, width float64) int {
-	n := 0
-	for i := range []rune(text) {
-		if f.wide(t, string([]rune(text)[:i+1])) > width {
+	n, sum := 0, 0.0
+	for _, r := range text {
+		if sum += f.advance(t, r) * t.size; sum > width {
 			break
 		}
-		n = i + 1
+		n++
 	}
 	return max(n, 1)
 }

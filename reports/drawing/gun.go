@@ -212,7 +212,7 @@ func (s *sheet) tube(g *diagram.Gun, plan gunPlan, origin, cathode at) {
 	s.earth(anode.plus(0, -tubeRadius-5))
 	s.brokenLine(left.plus(10.5, 0), left.plus(37, 0))
 	s.fill(ink, left.plus(38.5, 0), left.plus(36.5, 0.9), left.plus(36.5, -0.9))
-	name := label{names: []string{g.Emission.Name}, value: digest.Clean(g.Emission.Value), flag: s.flagOf(g.Emission.Mark, true)}
+	name := label{names: []string{g.Emission.Name}, value: digest.Clean(g.Emission.Value), flag: s.flagOf(g.Emission.Mark, true), of: g.Emission.Name}
 	s.above(left.plus(17, tubeRadius+4), toRight, name)
 }
 

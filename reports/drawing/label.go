@@ -16,6 +16,7 @@ type label struct {
 	names []string
 	value string
 	flag  pennant
+	of    string // the part or node it speaks of
 }
 
 // pennant tells a verdict: the number under which the legend explains it, and the word.
@@ -43,12 +44,12 @@ const labelWidth = 24
 
 // label makes the label of a part.
 func (s *sheet) label(p *diagram.Part) label {
-	return label{s.wrapped(named, p.Name, labelWidth), p.Value, s.flagOf(p.Mark, true)}
+	return label{s.wrapped(named, p.Name, labelWidth), p.Value, s.flagOf(p.Mark, true), p.Name}
 }
 
 // nodeLabel makes the label of a node.
 func (s *sheet) nodeLabel(n diagram.Node) label {
-	return label{s.wrapped(named, n.Name, labelWidth), n.Potential, s.flagOf(n.Mark, true)}
+	return label{s.wrapped(named, n.Name, labelWidth), n.Potential, s.flagOf(n.Mark, true), n.Name}
 }
 
 func (s *sheet) flagOf(number int, word bool) pennant {
@@ -84,6 +85,7 @@ func (s *sheet) above(p at, a align, l label) {
 
 // stacked sets the lines of a label downwards from a place.
 func (s *sheet) stacked(p at, a align, l label) {
+	defer s.belonging(l.of)()
 	p = p.plus(0, -leading/2)
 	for _, name := range l.names {
 		s.write(p, a, named, name)
@@ -100,6 +102,7 @@ func (s *sheet) stacked(p at, a align, l label) {
 
 // inline sets name and potential of a node in one line, a flag behind them.
 func (s *sheet) inline(p at, n diagram.Node) {
+	defer s.belonging(n.Name)()
 	s.write(p, toRight, named, inlineText(n))
 	if f := s.flagOf(n.Mark, false); f.number > 0 {
 		s.flag(p.plus(s.wide(named, inlineText(n))+1, 0), f)

@@ -102,7 +102,7 @@ const (
 )
 
 func (s *sheet) smoothingLabel(p diagram.Part) label {
-	return label{value: p.Value, flag: s.flagOf(p.Mark, false)}
+	return label{value: p.Value, flag: s.flagOf(p.Mark, false), of: p.Name}
 }
 
 // inlineRoom is the distance of a label in one line from its node, where the lines
@@ -176,7 +176,7 @@ func (s *sheet) coupling(c *diagram.Column, st step, from at, across float64, o 
 	}
 	part := c.Coupling[st.stage]
 	s.part(&part, to, from)
-	s.beside(from.plus(4*o.outward, rung/2), o.align, label{value: part.Value, flag: s.flagOf(part.Mark, false)})
+	s.beside(from.plus(4*o.outward, rung/2), o.align, label{value: part.Value, flag: s.flagOf(part.Mark, false), of: part.Name})
 	s.dot(to)
 	s.beside(to.plus(3*o.outward, 0), o.align, s.nodeLabel(c.Nodes[st.stage]))
 	own := c.Nodes[st.stage].Name
@@ -187,6 +187,7 @@ func (s *sheet) coupling(c *diagram.Column, st step, from at, across float64, o 
 // rectifier draws a diode between the column's own node and one across, turned as it
 // conducts.
 func (s *sheet) rectifier(d diagram.Part, own string, near, far at) {
+	defer s.belonging(d.Name)()
 	from, to := near, far
 	if d.From != own {
 		from, to = far, near

@@ -16,17 +16,20 @@ const (
 )
 
 // schematic lays out a whole diagram: the ladder to the left, beside it the rail in
-// rows, below them loose parts and the legend.
-func (s *sheet) schematic(d *diagram.Diagram) {
+// rows of at most a width, which go on under the ladder; below them loose parts and
+// the legend.
+func (s *sheet) schematic(d *diagram.Diagram, width float64) {
 	s.marks = d.Marks
 	top := s.ladder(d.Ladder)
 	over := top.plus(0, overTop)
 	start := at{s.box().right + apart, over.y}
 	s.line(top, over, start)
-	s.rows(inRows(s.zones(d), rowWidth), start)
+	s.rail(s.zones(d), start, width)
 	box := s.box()
 	low := s.loose(d.Loose, at{box.left, box.low - apart}, box.right-box.left)
-	s.legend(d, at{box.left, low - apart/2}, box.right-box.left)
+	if !s.bare {
+		s.legend(d, at{box.left, low - apart/2}, box.right-box.left)
+	}
 }
 
 // zones lists the pieces along the rail.
@@ -41,39 +44,59 @@ func (s *sheet) zones(d *diagram.Diagram) []zone {
 	return all
 }
 
-// inRows breaks zones into rows of at most a width where that can be.
-func inRows(zones []zone, width float64) [][]zone {
-	var rows [][]zone
-	left := 0.0
-	for _, z := range zones {
-		if len(rows) == 0 || z.width > left {
-			rows = append(rows, nil)
-			left = width
-		}
-		rows[len(rows)-1] = append(rows[len(rows)-1], z)
-		left -= z.width
-	}
-	return rows
-}
-
-// rows draws rows of zones under each other, joined by wires.
-func (s *sheet) rows(rows [][]zone, start at) {
+// rail draws zones in rows under each other, joined by wires: beside the ladder rows
+// of at most a width where that can be; a zone that is wider, and all that would begin
+// lower than the ladder ends, stands under it.
+func (s *sheet) rail(zones []zone, start at, width float64) {
+	ladder := s.box()
+	whole := start.x + width - ladder.left
+	row := inRow(zones, width)
 	p := start
-	for i, row := range rows {
-		for _, z := range row {
+	for len(zones) > 0 {
+		for _, z := range zones[:row] {
 			z.draw(p)
 			p = p.plus(z.width, 0)
 		}
-		switch {
-		case i < len(rows)-1:
-			next := at{start.x, s.lowest(start.x) - 2*lane - tallest(rows[i+1])}
-			over := next.y + tallest(rows[i+1]) + lane
-			s.line(p, p.plus(3, 0), at{p.x + 3, over}, at{start.x - 3, over}, at{start.x - 3, next.y}, next)
-			p = next
-		case !row[len(row)-1].ends:
-			s.terminal(p)
+		last := zones[row-1]
+		if zones = zones[row:]; len(zones) == 0 {
+			if !last.ends {
+				s.terminal(p)
+			}
+			return
 		}
+		row = inRow(zones, width)
+		next := s.nextRow(start, zones[:row])
+		if start.x > ladder.left+8 && (next.y < ladder.low || wide(zones[:row]) > width) {
+			start.x, width = ladder.left+8, whole-8
+			row = inRow(zones, width)
+			next = s.nextRow(start, zones[:row])
+		}
+		lane := next.y + tallest(zones[:row]) + lane
+		s.line(p, p.plus(3, 0), at{p.x + 3, lane}, at{start.x - 3, lane}, at{start.x - 3, next.y}, next)
+		p = next
 	}
+}
+
+// nextRow is where a row begins under all that is drawn at its place.
+func (s *sheet) nextRow(start at, row []zone) at {
+	return at{start.x, s.lowest(start.x-4) - 2*lane - tallest(row)}
+}
+
+// inRow is how many of the zones fit into a width, at least one.
+func inRow(zones []zone, width float64) int {
+	n := 1
+	for n < len(zones) && wide(zones[:n+1]) <= width {
+		n++
+	}
+	return min(n, len(zones))
+}
+
+func wide(row []zone) float64 {
+	sum := 0.0
+	for _, z := range row {
+		sum += z.width
+	}
+	return sum
 }
 
 func tallest(row []zone) float64 {

@@ -44,6 +44,7 @@ func (s *sheet) seriesZone(p *diagram.Part) zone {
 	return zone{
 		width: width, over: height + 2, under: earthDepth + 4,
 		draw: func(origin at) {
+			defer s.belonging(p.Name)()
 			s.part(p, origin, origin.plus(width, 0))
 			s.above(origin.plus(width/2, 2), centred, l)
 			if f.number > 0 {

@@ -64,7 +64,7 @@ func TestAnyChainIsDrawn(t *testing.T) {
 				n.Potential = "-20.12 kV"
 			}
 		}
-		p, err := Schematic(d)
+		p, err := schematic(d)
 		if err != nil {
 			t.Fatal(err)
 		}

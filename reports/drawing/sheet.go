@@ -25,9 +25,11 @@ type shape struct {
 	width vg.Length
 	dash  []vg.Length
 	ink   color.Gray
+	of    string // the part or node it belongs to; empty for the rest
 
 	text string
 	face font.Face
+	wide float64 // of the text, in millimetres
 	at   vg.Point
 }
 
@@ -36,6 +38,21 @@ type sheet struct {
 	*faces
 	shapes []shape
 	marks  []diagram.Mark
+	bare   bool   // without a legend
+	of     string // what is being drawn belongs to it
+}
+
+func (s *sheet) add(sh shape) {
+	sh.of = s.of
+	s.shapes = append(s.shapes, sh)
+}
+
+// belonging marks what is drawn until the end that it returns is called as belonging
+// to a part or node.
+func (s *sheet) belonging(name string) (end func()) {
+	before := s.of
+	s.of = name
+	return func() { s.of = before }
 }
 
 // Widths of lines and the pattern of broken ones.
@@ -47,7 +64,7 @@ const (
 func broken() []vg.Length { return []vg.Length{mm(1.2), mm(0.8)} }
 
 func (s *sheet) stroke(path vg.Path, width float64, dash []vg.Length) {
-	s.shapes = append(s.shapes, shape{path: path, width: mm(width), dash: dash, ink: ink})
+	s.add(shape{path: path, width: mm(width), dash: dash, ink: ink})
 }
 
 func lines(points []at, closed bool) vg.Path {
@@ -82,13 +99,13 @@ func (s *sheet) outline(points ...at) {
 
 // fill fills a figure.
 func (s *sheet) fill(c color.Gray, points ...at) {
-	s.shapes = append(s.shapes, shape{path: lines(points, true), ink: c})
+	s.add(shape{path: lines(points, true), ink: c})
 }
 
 // circle draws a circle filled with paper.
 func (s *sheet) circle(centre at, radius float64) {
 	path := round(centre, radius, 0, 2*math.Pi)
-	s.shapes = append(s.shapes, shape{path: path, ink: paper})
+	s.add(shape{path: path, ink: paper})
 	s.stroke(path, fine, nil)
 }
 
@@ -106,7 +123,7 @@ func round(centre at, radius, from, turn float64) vg.Path {
 
 // dot draws a joint of wires.
 func (s *sheet) dot(p at) {
-	s.shapes = append(s.shapes, shape{path: round(p, 0.55, 0, 2*math.Pi), ink: ink})
+	s.add(shape{path: round(p, 0.55, 0, 2*math.Pi), ink: ink})
 }
 
 // align is on which side of its place a text stands.
@@ -126,8 +143,9 @@ func (s *sheet) writeIn(c color.Gray, p at, a align, t style, text string) {
 	if text = clean(text); text == "" {
 		return
 	}
-	p = p.plus(-float64(a)*s.wide(t, text), -0.36*t.size)
-	s.shapes = append(s.shapes, shape{ink: c, text: text, face: s.face(t), at: p.point()})
+	width := s.wide(t, text)
+	p = p.plus(-float64(a)*width, -0.36*t.size)
+	s.add(shape{ink: c, text: text, face: s.face(t), wide: width, at: p.point()})
 }
 
 // margin is left free around a picture.
@@ -182,7 +200,7 @@ func millimetres(l vg.Length) float64 { return float64(l / vg.Millimeter) }
 func (sh shape) bounds() vg.Rectangle {
 	if sh.text != "" {
 		size := sh.face.Font.Size
-		return vg.Rectangle{Min: sh.at.Sub(vg.Point{Y: size / 4}), Max: sh.at.Add(vg.Point{X: sh.face.Width(sh.text), Y: size * 3 / 4})}
+		return vg.Rectangle{Min: sh.at.Sub(vg.Point{Y: size / 4}), Max: sh.at.Add(vg.Point{X: mm(sh.wide), Y: size * 3 / 4})}
 	}
 	var b vg.Rectangle
 	for i, c := range sh.path {

@@ -23,11 +23,27 @@ func (p *Picture) SVG(id, title, description string) []byte {
 		decimal(p.Width), decimal(p.Height), id, id)
 	fmt.Fprintf(w, "\n<title id=\"%s-title\">%s</title>\n<desc id=\"%s-description\">%s</desc>\n", id, escaped(title), id, escaped(description))
 	w.WriteString(`<g fill="none" stroke="currentColor" stroke-linecap="round" stroke-linejoin="round" font-family="DejaVu Sans, Verdana, sans-serif">` + "\n")
-	for _, s := range p.shapes {
-		w.shape(s)
-	}
+	w.all(p.shapes)
 	w.WriteString("</g>\n</svg>\n")
 	return w.Bytes()
+}
+
+// all writes shapes; those that belong together in a group that names what they show.
+func (w *svgWriter) all(shapes []shape) {
+	of := ""
+	for _, s := range shapes {
+		if s.of != of && of != "" {
+			w.WriteString("</g>\n")
+		}
+		if s.of != of && s.of != "" {
+			fmt.Fprintf(w, "<g data-of=\"%s\">\n", escaped(s.of))
+		}
+		of = s.of
+		w.shape(s)
+	}
+	if of != "" {
+		w.WriteString("</g>\n")
+	}
 }
 
 func escaped(text string) string { return html.EscapeString(clean(text)) }
@@ -45,7 +61,7 @@ func (w *svgWriter) shape(s shape) {
 	case s.width == 0:
 		fmt.Fprintf(w, "<path d=\"%s\"%s/>\n", w.data(s.path), paint(s))
 	default:
-		fmt.Fprintf(w, "<path d=\"%s\" stroke-width=\"%s\"%s/>\n", w.data(s.path), decimal(s.width), dashes(s.dash))
+		fmt.Fprintf(w, "<path d=\"%s\" stroke-width=\"%s\"%s%s/>\n", w.data(s.path), decimal(s.width), dashes(s.dash), faint(s))
 	}
 }
 
@@ -55,6 +71,14 @@ func paint(s shape) string {
 		return ` class="paper" fill="#fff" stroke="none"`
 	}
 	return ` fill="currentColor" stroke="none"`
+}
+
+// faint lines take their strength from the ink of the page.
+func faint(s shape) string {
+	if s.ink == grid {
+		return ` class="grid" opacity="0.3"`
+	}
+	return ""
 }
 
 func dashes(dash []vg.Length) string {
@@ -75,7 +99,7 @@ func (w *svgWriter) text(s shape) {
 		weight = ` font-weight="bold"`
 	}
 	fmt.Fprintf(w, "<text %s font-size=\"%s\" textLength=\"%s\" lengthAdjust=\"spacingAndGlyphs\"%s%s>%s</text>\n",
-		w.place("x=\"%s\" y=\"%s\"", s.at), decimal(s.face.Font.Size), decimal(s.face.Width(s.text)), weight, paint(s), escaped(s.text))
+		w.place("x=\"%s\" y=\"%s\"", s.at), decimal(s.face.Font.Size), decimal(mm(s.wide)), weight, paint(s), escaped(s.text))
 }
 
 // place writes a point with the picture's upper left corner as its origin.

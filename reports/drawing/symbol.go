@@ -58,6 +58,7 @@ var bodies = map[diagram.Kind]struct {
 
 // part draws a part with its leads between two places, its own From at the first.
 func (s *sheet) part(p *diagram.Part, from, to at) {
+	defer s.belonging(p.Name)()
 	f, length := between(from, to)
 	body := bodies[p.Kind]
 	lead := s.line

@@ -30,10 +30,11 @@ func schematicOf(d *diagram.Diagram, ids map[about]string) (*schematic, error) {
 	if d == nil {
 		return nil, nil
 	}
-	picture, err := drawing.Schematic(d)
+	pen, err := drawing.NewPen()
 	if err != nil {
 		return nil, err
 	}
+	picture := pen.Schematic(d)
 	s := &schematic{
 		Drawing: template.HTML(picture.SVG("drawing", "Schematic", drawing.Words(d))),
 		Caption: "Drawn from the description. Flags bear the numbers of the list below; their outline tells the verdict.",

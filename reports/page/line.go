@@ -5,9 +5,9 @@ import (
 	"strings"
 )
 
-func plain(s string) Line  { return Line{s, Plain} }
-func strong(s string) Line { return Line{s, Strong} }
-func small(s string) Line  { return Line{s, Small} }
+func plain(s string) Line  { return Line{Text: s} }
+func strong(s string) Line { return Line{Text: s, Weight: Strong} }
+func small(s string) Line  { return Line{Text: s, Weight: Small} }
 
 // labelled puts a label before a text; an empty text stays empty.
 func labelled(label, s string) Line { return plain(prefixed(label, s)) }
@@ -19,6 +19,14 @@ func prefixed(label, s string) string {
 		return ""
 	}
 	return label + " " + s
+}
+
+// linked is a line that leads to an anchor as a whole.
+func linked(l Line, to string) Line {
+	if to != "" {
+		l.Links = append(l.Links, Link{To: to})
+	}
+	return l
 }
 
 // lines is a cell of the lines that are not empty.

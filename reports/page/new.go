@@ -20,13 +20,23 @@ const (
 // untitled stands where the description has no title.
 const untitled = "A chain without a title"
 
-// New lays out a review.
+// New lays out a review: the sheet that answers first, a chapter for each part of the
+// chain, and what all of it rests on.
 func New(r *rules.Review) *Document {
-	sections := []Section{front(r)}
-	sections = append(sections, findings(r)...)
-	sections = append(sections, figures(r)...)
-	sections = append(sections, remarks(r)...)
-	return &Document{Block: titleBlock(r), Sections: append(sections, signing(r))}
+	n := newWriter(r)
+	rest := append(n.chapters(), n.remarks()...)
+	rest = append(rest, signing(r))
+	front := n.front()
+	front.Blocks = append(front.Blocks, contents(rest))
+	return &Document{Block: titleBlock(r), Sections: append([]Section{front}, rest...)}
+}
+
+func contents(sections []Section) Contents {
+	var c Contents
+	for _, s := range sections {
+		c.Entries = append(c.Entries, Entry{s.Title, s.Anchor})
+	}
+	return c
 }
 
 func titleBlock(r *rules.Review) TitleBlock {
@@ -44,7 +54,8 @@ func (d *Document) Noted(note string) *Document {
 
 // front is the sheet that answers first: verdict, deference, what the chain is,
 // what stands against switching on, what is missing.
-func front(r *rules.Review) Section {
+func (n *writer) front() Section {
+	r := n.review
 	blocks := []Block{
 		Paragraph{"Review before first power-up"},
 		Banner{Verdict: r.Verdict, Word: strings.ToUpper(string(r.Verdict)), Sentence: digest.Sentence(r), Rest: "Findings: " + digest.Counts(r.Counts) + "."},
@@ -53,9 +64,9 @@ func front(r *rules.Review) Section {
 	if len(r.Summary) > 0 {
 		blocks = append(blocks, summary(r.Summary))
 	}
-	blocks = append(blocks, against(r)...)
+	blocks = append(blocks, n.against()...)
 	blocks = append(blocks, missing(r)...)
-	return Section{Title: shortened(cmp.Or(r.Heading.Title, untitled)), Blocks: blocks}
+	return Section{Title: shortened(cmp.Or(r.Heading.Title, untitled)), Anchor: "front", Blocks: blocks}
 }
 
 func summary(lines []rules.Line) Facts {
@@ -68,12 +79,13 @@ func summary(lines []rules.Line) Facts {
 
 // against is what stands against switching on and, after it, what is met with little
 // in hand: as many rows as the sheet holds.
-func against(r *rules.Review) []Block {
+func (n *writer) against() []Block {
+	r := n.review
 	if len(r.Findings) == 0 {
 		return nil
 	}
 	const little = "Met with little in hand or on an assumption"
-	standing, narrow := entryRows(digest.Against(r)), entryRows(digest.Narrow(r))
+	standing, narrow := n.entryRows(digest.Against(r)), n.entryRows(digest.Narrow(r))
 	title := "Stands against switching on"
 	var blocks []Block
 	if len(standing) == 0 {
@@ -82,18 +94,20 @@ func against(r *rules.Review) []Block {
 		standing = append(standing, Row{Group: true, Cells: []Cell{lines(strong(little))}})
 	}
 	if rows := append(standing, narrow...); len(rows) > 0 {
-		blocks = append(blocks, Table{Columns: []Column{{Title: "", Share: 0.16}, {Title: title, Share: 0.34}, {Title: "Why", Share: 0.5}}, Rows: rows, Fill: true})
+		blocks = append(blocks, Table{Columns: []Column{{Title: "", Share: 0.15}, {Title: title, Share: 0.32}, {Title: "Why", Share: 0.44}, {Title: "Sheet", Share: 0.09, Right: true}}, Rows: rows, Fill: true})
 	}
 	return blocks
 }
 
-func entryRows(findings []rule.Finding) []Row {
+func (n *writer) entryRows(findings []rule.Finding) []Row {
 	var rows []Row
 	for _, e := range digest.Entries(findings) {
+		to := n.anchorOf(e.First)
 		rows = append(rows, Row{Cells: []Cell{
 			{Verdict: e.First.Verdict},
-			lines(strong(e.First.Rule), plain(shortened(e.Names(mostSubjects))), small("concerns "+string(e.First.Concern))),
+			lines(linked(strong(e.First.Rule), to), plain(shortened(e.Names(mostSubjects))), small("concerns "+string(e.First.Concern))),
 			lines(plain(shortened(e.First.Because))),
+			{Lines: []Line{{Sheet: to, Links: []Link{{To: to}}}}},
 		}})
 	}
 	return rows
@@ -116,33 +130,4 @@ func missing(r *rules.Review) []Block {
 		return nil
 	}
 	return []Block{Facts{[]Fact{{"missing in the description", text}}}}
-}
-
-// findings is the table of all findings, the worst first.
-func findings(r *rules.Review) []Section {
-	if len(r.Findings) == 0 {
-		return nil
-	}
-	t := Table{Columns: []Column{{Title: "Verdict", Share: 0.13}, {Title: "Rule and subject", Share: 0.24}, {Title: "Amounts", Share: 0.22}, {Title: "Reason, remedy, sources", Share: 0.41}}}
-	for _, f := range digest.Sorted(r.Findings) {
-		needed, provided := digest.Labels(f)
-		t.Rows = append(t.Rows, Row{Cells: []Cell{
-			{Verdict: f.Verdict},
-			lines(strong(f.Rule), plain(f.Subject), small("concerns "+string(f.Concern)), small(digest.Line(f))),
-			lines(labelled(needed, digest.Needed(f)), labelled(provided, digest.Provided(f)), labelled("margin", digest.Margin(f)), labelledSmall("under", f.Under)),
-			reasons(f),
-		}})
-	}
-	return []Section{{Title: "Findings", Fresh: true, Blocks: []Block{t}}}
-}
-
-func reasons(f rule.Finding) Cell {
-	all := []Line{plain(f.Because), labelled("Remedy:", f.Remedy), labelled("Missing:", strings.Join(f.Missing, ", "))}
-	for _, a := range f.Assumptions {
-		all = append(all, labelled("Assumed:", a))
-	}
-	for _, s := range f.Sources {
-		all = append(all, small(digest.Source(s)))
-	}
-	return lines(all...)
 }

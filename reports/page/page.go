@@ -3,7 +3,11 @@
 // sheets.
 package page
 
-import "kilovet/rules/rule"
+import (
+	"kilovet/rules/diagram"
+	"kilovet/rules/exhibit"
+	"kilovet/rules/rule"
+)
 
 // Document is a review ready to be set on sheets.
 type Document struct {
@@ -25,10 +29,11 @@ type Section struct {
 	Fresh  bool // begins a sheet
 	Whole  bool // stands on one sheet where it can
 	Blocks []Block
+	Anchor string // what links lead to
 }
 
-// Block is one piece of a section: Banner, Notice, Paragraph, Facts, Table or
-// Signatures.
+// Block is one piece of a section: Banner, Notice, Paragraph, Facts, Table, Gallery,
+// Contents or Signatures.
 type Block interface{ block() }
 
 // Banner is the verdict of the whole review.
@@ -52,10 +57,31 @@ type Fact struct{ Label, Text string }
 
 // Table is rows of cells under columns whose shares of the width sum to one.
 type Table struct {
+	Title   string // stands above it
+	Note    string // stands under the title
+	Anchor  string // what links lead to
 	Columns []Column
 	Rows    []Row
 	Fill    bool // ends with the sheet it stands on; Rest counts the rows left out
 }
+
+// Gallery is pictures, side by side where they are narrow.
+type Gallery struct{ Figures []Figure }
+
+// Figure is a picture with its caption: a curve or a schematic.
+type Figure struct {
+	Anchor, Label, Caption string
+	Curve                  *exhibit.Curve
+	Diagram                *diagram.Diagram
+	Wide                   bool              // takes the whole width
+	Spots                  map[string]string // anchors of parts and nodes shown
+}
+
+// Contents lists the sections with the sheets that they begin on.
+type Contents struct{ Entries []Entry }
+
+// Entry is one line of the contents.
+type Entry struct{ Title, Anchor string }
 
 // Column is a title and a share of the width.
 type Column struct {
@@ -70,6 +96,8 @@ type Row struct {
 	Group bool
 	Under bool // belongs to the group row before it
 	Cells []Cell
+
+	Anchor string // what links lead to
 }
 
 // Cell is a verdict or lines of text, each a paragraph of its own.
@@ -82,7 +110,12 @@ type Cell struct {
 type Line struct {
 	Text   string
 	Weight Weight
+	Links  []Link
+	Sheet  string // an anchor: the sheet that it is on stands after the text
 }
+
+// Link leads from a word of a line, or from all of it, to an anchor.
+type Link struct{ Word, To string }
 
 // Weight is how much a line stands out.
 type Weight int
@@ -105,4 +138,6 @@ func (Notice) block()     {}
 func (Paragraph) block()  {}
 func (Facts) block()      {}
 func (Table) block()      {}
+func (Gallery) block()    {}
+func (Contents) block()   {}
 func (Signatures) block() {}

@@ -24,7 +24,7 @@ func outline(d *page.Document) string {
 	var b strings.Builder
 	fmt.Fprintf(&b, "title block %+v\n", d.Block)
 	for _, s := range d.Sections {
-		fmt.Fprintf(&b, "\nsection %q fresh %t whole %t\n", s.Title, s.Fresh, s.Whole)
+		fmt.Fprintf(&b, "\nsection %q fresh %t whole %t anchor %q\n", s.Title, s.Fresh, s.Whole, s.Anchor)
 		for _, block := range s.Blocks {
 			piece(&b, block)
 		}
@@ -33,22 +33,41 @@ func outline(d *page.Document) string {
 }
 
 func piece(b *strings.Builder, block page.Block) {
-	t, ok := block.(page.Table)
-	if !ok {
+	switch block := block.(type) {
+	case page.Table:
+		table(b, block)
+	case page.Gallery:
+		for _, f := range block.Figures {
+			kind := "schematic"
+			if f.Curve != nil {
+				kind = "curve " + f.Curve.ID
+			}
+			fmt.Fprintf(b, "  Figure %q %q wide %t %s: %s %v\n", f.Anchor, f.Label, f.Wide, kind, f.Caption, f.Spots)
+		}
+	default:
 		fmt.Fprintf(b, "  %s %+v\n", strings.TrimPrefix(fmt.Sprintf("%T", block), "page."), block)
-		return
 	}
-	fmt.Fprintf(b, "  Table %+v\n", t.Columns)
+}
+
+func table(b *strings.Builder, t page.Table) {
+	fmt.Fprintf(b, "  Table %q %q %q %+v\n", t.Title, t.Note, t.Anchor, t.Columns)
 	for _, r := range t.Rows {
-		fmt.Fprintf(b, "    row group %t under %t\n", r.Group, r.Under)
+		fmt.Fprintf(b, "    row group %t under %t anchor %q\n", r.Group, r.Under, r.Anchor)
 		for _, c := range r.Cells {
 			fmt.Fprintf(b, "      | %s", c.Verdict)
 			for _, l := range c.Lines {
-				fmt.Fprintf(b, " [%d %s]", l.Weight, l.Text)
+				fmt.Fprintf(b, " [%d %s%s%s]", l.Weight, l.Text, links(l.Links), l.Sheet)
 			}
 			b.WriteByte('\n')
 		}
 	}
+}
+
+func links(all []page.Link) string {
+	if len(all) == 0 {
+		return ""
+	}
+	return fmt.Sprint(" links ", all)
 }
 
 func TestGolden(t *testing.T) {
@@ -153,6 +172,12 @@ func names(r *rules.Review) []string {
 			all = append(all, s.Text, string(s.Mark))
 		}
 	}
+	for _, c := range r.Curves {
+		all = append(all, "curve "+c.ID, c.Title, c.Note, c.Basis)
+	}
+	for _, t := range r.Tables {
+		all = append(all, t.Title, t.Basis)
+	}
 	for _, f := range r.Figures {
 		if f.Value == 0 {
 			continue // a part at which a figure is nought has no row
@@ -197,6 +222,90 @@ func checkTable(t *testing.T, title string, table page.Table) {
 		}
 		if len(r.Cells) != want {
 			t.Errorf("%s: %d cells in a row, want %d", title, len(r.Cells), want)
+		}
+	}
+}
+
+// Whatever is pointed at stands somewhere, once.
+func TestLinksLead(t *testing.T) {
+	for name, r := range map[string]*rules.Review{"failing": sample.Failing(), "hard": sample.Hard(), "empty": sample.Empty()} {
+		there, wanted := map[string]int{}, map[string]bool{}
+		for _, s := range page.New(r).Sections {
+			there[s.Anchor]++
+			for _, block := range s.Blocks {
+				ends(block, there, wanted)
+			}
+		}
+		for to := range wanted {
+			if to != "" && there[to] == 0 {
+				t.Errorf("%s: %q is nowhere", name, to)
+			}
+		}
+		if name == "hard" && len(wanted) < 60 {
+			t.Errorf("%d links", len(wanted))
+		}
+	}
+}
+
+func ends(block page.Block, there map[string]int, wanted map[string]bool) {
+	switch block := block.(type) {
+	case page.Table:
+		there[block.Anchor]++
+		for _, r := range block.Rows {
+			there[r.Anchor]++
+			for _, c := range r.Cells {
+				for _, l := range c.Lines {
+					wanted[l.Sheet] = true
+					for _, link := range l.Links {
+						wanted[link.To] = true
+					}
+				}
+			}
+		}
+	case page.Gallery:
+		for _, f := range block.Figures {
+			there[f.Anchor]++
+			for _, to := range f.Spots {
+				wanted[to] = true
+			}
+		}
+	case page.Contents:
+		for _, e := range block.Entries {
+			wanted[e.Anchor] = true
+		}
+	}
+}
+
+func TestAFindingLeadsToItsSourcesAndFigures(t *testing.T) {
+	r := sample.Failing()
+	r.Figures = append(r.Figures,
+		figure.Figure{ID: "spacing.voltage", Subject: "gun feedthrough, air side", Value: 2e4, Unit: "V", What: "highest", Basis: "rules"},
+		figure.Figure{ID: "spacing.creepage_needed", Subject: "gun feedthrough, air side", Value: 0.125, Unit: "m", What: "needed", Basis: "insulation"})
+	text := outline(page.New(r))
+	for _, want := range []string{
+		"judged by [1]; see also [2] links [{[1] source 1} {[2] source 2}]",
+		"see spacing.creepage_needed, spacing.voltage links [{spacing.creepage_needed figure spacing.creepage_needed gun feedthrough, air side}",
+		`anchor "figure spacing.voltage gun feedthrough, air side"`,
+	} {
+		if !strings.Contains(text, want) {
+			t.Errorf("%q is missing in\n%s", want, text)
+		}
+	}
+}
+
+// Figures of several subjects of a family stand beside each other, a row a subject.
+func TestFamiliesStandBesideEachOther(t *testing.T) {
+	r := sample.Sound()
+	for _, subject := range []string{"one", "two"} {
+		r.Figures = append(r.Figures, figure.Figure{ID: "spacing.voltage", Subject: subject, Value: 2e4, Unit: "V", What: "highest", Basis: "rules"})
+	}
+	r.Figures = append(r.Figures,
+		figure.Figure{ID: "spacing.clearance_needed", Subject: "one", Value: 0.03, Unit: "m", What: "needed", Basis: "insulation"},
+		figure.Figure{ID: "spacing.clearance_needed", Subject: "three", Value: 0.04, Unit: "m", What: "needed", Basis: "insulation"})
+	text := outline(page.New(r))
+	for _, want := range []string{"{Title:clearance needed", "[0 one]\n      |  [0 20 kV]\n      |  [0 30 mm]", "[0 two]\n      |  [0 20 kV]\n      | \n", "[0 three]\n      | \n      |  [0 40 mm]", "spacing.voltage: highest (basis: rules)"} {
+		if !strings.Contains(text, want) {
+			t.Errorf("%q is missing in\n%s", want, text)
 		}
 	}
 }

@@ -9,21 +9,29 @@ import (
 	"kilovet/rules/rule"
 )
 
-// figures is the tables of the figures: those that depend on the state, and the
-// others. Rows of parts that are nought throughout are left out, and that is said.
-func figures(r *rules.Review) []Section {
-	var sections []Section
-	states := digest.States(r.Figures)
-	if groups := telling(digest.ByState(r.Figures, states)); len(groups) > 0 {
-		sections = append(sections, Section{Title: "Figures by state", Fresh: true, Blocks: []Block{figureTable(groups, states)}})
+// figures is the tables of the figures of a chapter: those that depend on the state, and
+// the others. Rows of parts that are nought throughout are left out, and that is said.
+func figures(all []figure.Figure) []Block {
+	var blocks []Block
+	states := digest.States(all)
+	if groups := telling(digest.ByState(all, states)); len(groups) > 0 {
+		t := figureTable(groups, states)
+		t.Title = "Figures by state"
+		blocks = append(blocks, t)
 	}
-	if groups := telling(digest.Stateless(r.Figures)); len(groups) > 0 {
-		sections = append(sections, Section{Title: "Figures", Fresh: len(sections) == 0, Blocks: []Block{figureTable(groups, []string{"value"})}})
+	fams, groups := families(telling(digest.Stateless(all)))
+	for _, f := range fams {
+		blocks = append(blocks, f.table())
 	}
-	if last := len(sections) - 1; last >= 0 && silent(r.Figures, states) {
-		sections[last].Blocks = append(sections[last].Blocks, Paragraph{"Nodes and parts at which a figure is nought in every state are left out here; the JSON results list them."})
+	if len(groups) > 0 {
+		t := figureTable(groups, []string{"value"})
+		t.Title = "Figures"
+		blocks = append(blocks, t)
 	}
-	return sections
+	if silent(all, states) {
+		blocks = append(blocks, Paragraph{"Nodes and parts at which a figure is nought in every state are left out here; the JSON results list them."})
+	}
+	return blocks
 }
 
 // telling is the groups without the rows that say nothing.
@@ -45,24 +53,34 @@ func silent(figures []figure.Figure, states []string) bool {
 }
 
 func figureTable(groups []digest.Group, columns []string) Table {
-	share := min(0.2, 0.6/float64(len(columns)))
+	share := min(0.15, 0.6/float64(len(columns)))
 	t := Table{Columns: []Column{{Title: "Figure and subject", Share: 1 - share*float64(len(columns))}}}
 	for _, c := range columns {
 		t.Columns = append(t.Columns, Column{Title: c, Share: share, Right: true})
 	}
 	for _, g := range groups {
 		if len(g.Rows) == 1 {
-			t.Rows = append(t.Rows, valueRow(g.Rows[0], strong(g.ID), plain(g.What), plain(g.Rows[0].Part()), labelledSmall("basis:", g.Basis)))
+			only := valueRow(g.Rows[0], strong(g.ID), plain(g.Rows[0].Part()), small(meaning(g)))
+			only.Anchor = anchor("figure", g.ID, g.Rows[0].Part())
+			t.Rows = append(t.Rows, only)
 			continue
 		}
-		t.Rows = append(t.Rows, Row{Group: true, Cells: []Cell{lines(strong(g.ID), plain(g.What), labelledSmall("basis:", g.Basis))}})
+		t.Rows = append(t.Rows, Row{Group: true, Cells: []Cell{lines(strong(g.ID), small(meaning(g)))}})
 		for _, row := range g.Rows {
 			under := valueRow(row, plain(row.Subject))
-			under.Under = true
+			under.Under, under.Anchor = true, anchor("figure", g.ID, row.Part())
 			t.Rows = append(t.Rows, under)
 		}
 	}
 	return t
+}
+
+// meaning says what a figure is and how it was obtained.
+func meaning(g digest.Group) string {
+	if g.Basis == "" {
+		return g.What
+	}
+	return g.What + "; basis: " + g.Basis
 }
 
 func valueRow(row digest.Row, first ...Line) Row {
@@ -74,18 +92,32 @@ func valueRow(row digest.Row, first ...Line) Row {
 }
 
 // remarks is what stands beside the findings: assumptions, cautions, rules that
-// did not apply.
-func remarks(r *rules.Review) []Section {
+// did not apply, sources.
+func (n *writer) remarks() []Section {
+	r := n.review
 	var sections []Section
-	add := func(title string, blocks []Block) {
+	add := func(title, anchor string, blocks []Block) {
 		if len(blocks) > 0 {
-			sections = append(sections, Section{Title: title, Blocks: blocks})
+			sections = append(sections, Section{Title: title, Anchor: anchor, Blocks: blocks})
 		}
 	}
-	add("Assumptions", paragraphs(r.Assumptions))
-	add("Cautions", factsOf(r.Cautions, func(c rule.Caution) Fact { return Fact{c.Subject, c.Text} }))
-	add("Rules passed over", factsOf(r.PassedOver, func(p rule.PassedOver) Fact { return Fact{p.Rule, p.Because} }))
+	add("Assumptions", "assumptions", paragraphs(r.Assumptions))
+	add("Cautions", "cautions", factsOf(r.Cautions, func(c rule.Caution) Fact { return Fact{c.Subject, c.Text} }))
+	add("Rules passed over", "passed-over", factsOf(r.PassedOver, func(p rule.PassedOver) Fact { return Fact{p.Rule, p.Because} }))
+	add("Sources", "sources", n.sourceTable())
 	return sections
+}
+
+// sourceTable numbers the sources that findings refer to.
+func (n *writer) sourceTable() []Block {
+	if len(n.sources) == 0 {
+		return nil
+	}
+	t := Table{Columns: []Column{{Title: "No.", Share: 0.08}, {Title: "Source", Share: 0.67}, {Title: "How it is known", Share: 0.25}}}
+	for i, s := range n.sources {
+		t.Rows = append(t.Rows, Row{Anchor: sourceAnchor(i + 1), Cells: []Cell{lines(plain(sourceWord(i + 1))), lines(plain(s.Text)), lines(plain(digest.Known(s)))}})
+	}
+	return []Block{t}
 }
 
 func paragraphs(texts []string) []Block {
@@ -113,7 +145,7 @@ func signing(r *rules.Review) Section {
 	for _, in := range r.Inputs {
 		t.Rows = append(t.Rows, Row{Cells: []Cell{lines(plain(in.Role)), lines(plain(in.Name)), lines(small(in.SHA256))}})
 	}
-	return Section{Title: "Sign-off", Whole: true, Blocks: []Block{
+	return Section{Title: "Sign-off", Anchor: "sign-off", Whole: true, Blocks: []Block{
 		Paragraph{"The signatures below are for the files named here by their SHA-256, as reviewed by " + r.Program.Name + " " + r.Program.Version + ". A file changed afterwards needs a new review."},
 		t,
 		Notice{r.Deference},

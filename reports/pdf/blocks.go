@@ -41,20 +41,20 @@ func (w *flow) centred(x, baseline, width float64, lines []set, white bool) {
 // banner is the verdict of the review: its word in a box, the sentence beside it.
 func (w *flow) banner(b page.Banner) {
 	const wide = 58.0
-	lines := append(w.wrap(answer, b.Sentence, across-wide-6), w.wrap(body, b.Rest, across-wide-6)...)
+	lines := append(w.wrap(answer, b.Sentence, w.across-wide-6), w.wrap(body, b.Rest, w.across-wide-6)...)
 	high := max(17, height(lines)+4)
 	w.gap(2)
 	w.room(high)
-	white := w.sheet().mark(b.Verdict, left, w.y, wide, high)
-	w.centred(left, w.y+high/2+word.size*points*0.36, wide, w.fit(word, b.Word, wide-4, 1), white)
-	w.sheet().lines(left+wide+6, w.y+(high-height(lines))/2, lines)
+	white := w.sheet().mark(b.Verdict, w.left, w.y, wide, high)
+	w.centred(w.left, w.y+high/2+word.size*points*0.36, wide, w.fit(word, b.Word, wide-4, 1), white)
+	w.sheet().lines(w.left+wide+6, w.y+(high-height(lines))/2, lines)
 	w.y += high + 2
 }
 
 // notice is a paragraph with a bar at its side.
 func (w *flow) notice(b page.Notice) {
 	w.gap(2)
-	w.row(row{bar: true, pad: 1, cells: []rowCell{{x: left + 3, width: across - 3, lines: w.wrap(body, b.Text, across-3)}}})
+	w.row(row{bar: true, pad: 1, cells: []rowCell{{x: w.left + 3, width: w.across - 3, lines: w.wrap(body, b.Text, w.across-3)}}})
 	w.y += 2
 }
 
@@ -64,8 +64,8 @@ func (w *flow) facts(b page.Facts) {
 	w.gap(2)
 	for _, f := range b.Facts {
 		w.row(row{pad: 0.7, ruled: true, cells: []rowCell{
-			{x: left, width: wide, lines: w.wrap(strong, f.Label, wide-3)},
-			{x: left + wide, width: across - wide, lines: w.wrap(body, f.Text, across-wide)},
+			{x: w.left, width: wide, lines: w.wrap(strong, f.Label, wide-3)},
+			{x: w.left + wide, width: w.across - wide, lines: w.wrap(body, f.Text, w.across-wide)},
 		}})
 	}
 }
@@ -78,9 +78,9 @@ func (w *flow) signatures(b page.Signatures) {
 	const high = 36.0
 	w.gap(3)
 	w.room(high)
-	wide := across / float64(len(b.Blanks))
+	wide := w.across / float64(len(b.Blanks))
 	for i, blank := range b.Blanks {
-		w.blank(left+float64(i)*wide, wide, high, blank)
+		w.blank(w.left+float64(i)*wide, wide, high, blank)
 	}
 	w.y += high
 }

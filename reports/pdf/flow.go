@@ -1,56 +1,64 @@
 package pdf
 
-import "kilovet/reports/page"
-
-// The sheet, in millimetres: A4 with the borders of ISO 5457 (20 on the filing
-// side, 10 on the others), the title block at the foot of the frame.
-const (
-	frameLeft   = 20.0
-	frameRight  = 200.0
-	frameTop    = 10.0
-	frameBottom = 287.0
-	blockHeight = 30.0
-
-	left   = frameLeft + 5
-	right  = frameRight - 5
-	top    = frameTop + 6
-	bottom = frameBottom - blockHeight - 4
-	across = right - left
+import (
+	"kilovet/reports/drawing"
+	"kilovet/reports/page"
 )
 
 // flow fills sheets from the top.
 type flow struct {
 	*fonts
-	sheets []*sheet
-	y      float64
+	area
+	pen     *drawing.Pen
+	sheets  []*sheet
+	y       float64
+	anchors map[string]spot
+}
+
+// spot is where links lead.
+type spot struct {
+	sheet int
+	y     float64
+}
+
+func newFlow(f *fonts, a area, pen *drawing.Pen) *flow {
+	return &flow{fonts: f, area: a, pen: pen, anchors: map[string]spot{}}
+}
+
+// trial is an empty flow on the same kind of sheet, to see what room things take.
+func (w *flow) trial(y float64) *flow {
+	t := newFlow(w.fonts, w.area, w.pen)
+	t.sheets, t.y = []*sheet{{}}, y
+	return t
 }
 
 // layout sets the document on sheets and gives each its frame and title block.
-func layout(f *fonts, d *page.Document) []*sheet {
-	w := &flow{fonts: f}
+func layout(f *fonts, a area, pen *drawing.Pen, d *page.Document) *flow {
+	w := newFlow(f, a, pen)
 	w.turn()
 	for _, s := range d.Sections {
 		w.section(s)
 	}
 	for i, s := range w.sheets {
-		frame(f, s, d.Block, i+1, len(w.sheets))
+		w.frame(s, d.Block, i+1, len(w.sheets))
+		w.resolve(s)
 	}
-	return w.sheets
+	return w
 }
 
 // turn begins a new sheet.
 func (w *flow) turn() {
 	w.sheets = append(w.sheets, &sheet{})
-	w.y = top
+	w.y = w.top
 }
 
 func (w *flow) sheet() *sheet { return w.sheets[len(w.sheets)-1] }
 
-func (w *flow) fresh() bool { return w.y == top }
+func (w *flow) fresh() bool { return w.y == w.top }
 
 // room turns the sheet where less than the height is left, unless it is empty.
 func (w *flow) room(height float64) {
-	if w.y+height > bottom && !w.fresh() {
+	if w.y+height > w.bottom && !w.fresh() {
 		w.turn()
 	}
 }
@@ -62,17 +70,22 @@ func (w *flow) gap(height float64) {
 	}
 }
 
-// keep is how much of a section must follow its heading on the same sheet.
+// keep is how much of a section should follow its heading on the same sheet.
 const keep = 24.0
 
 func (w *flow) section(s page.Section) {
 	if s.Fresh && !w.fresh() || s.Whole && !w.holds(s) {
 		w.turn()
 	}
-	w.gap(7)
-	lines := append(w.wrap(strong, s.Lead, across), w.wrap(heading, s.Title, across)...)
-	w.room(height(lines) + keep)
-	w.sheet().lines(left, w.y, lines)
+	w.gap(8)
+	lines := append(w.wrap(strong, s.Lead, w.across), w.wrap(heading, s.Title, w.across)...)
+	w.room(min(height(lines)+w.first(s.Blocks), w.bottom-w.top-1))
+	if !w.fresh() {
+		w.sheet().add(stroke{w.left, w.y - 3, w.right, w.y - 3, 0.5, 0})
+	}
+	w.anchor(s.Anchor, w.y)
+	w.sheet().add(bookmark{w.guard(regular, s.Title), w.y})
+	w.sheet().lines(w.left, w.y, lines)
 	w.y += height(lines) + 1.5
 	for i, b := range s.Blocks {
 		if t, ok := b.(page.Table); ok && t.Fill {
@@ -82,21 +95,32 @@ func (w *flow) section(s page.Section) {
 	}
 }
 
+// first is how much must follow a heading on the same sheet.
+func (w *flow) first(blocks []page.Block) float64 {
+	if len(blocks) == 0 {
+		return 0
+	}
+	if g, ok := blocks[0].(page.Gallery); ok && len(g.Figures) > 0 {
+		return w.firstRow(g) + 4
+	}
+	return keep
+}
+
 // tall is the height that blocks take after others on a sheet of their own.
 func (w *flow) tall(blocks []page.Block) float64 {
-	trial := &flow{fonts: w.fonts, sheets: []*sheet{{}}, y: top + 1}
+	trial := w.trial(w.top + 1)
 	for _, b := range blocks {
 		trial.block(b)
 	}
 	if len(trial.sheets) > 1 {
-		return bottom - top
+		return w.bottom - w.top
 	}
-	return trial.y - top - 1
+	return trial.y - w.top - 1
 }
 
 // holds reports whether what is left of the sheet takes the section whole.
 func (w *flow) holds(s page.Section) bool {
-	trial := &flow{fonts: w.fonts, sheets: []*sheet{{}}, y: w.y}
+	trial := w.trial(w.y)
 	s.Whole = false
 	trial.section(s)
 	return w.fresh() || len(trial.sheets) == 1
@@ -110,11 +134,15 @@ func (w *flow) block(b page.Block) {
 		w.notice(b)
 	case page.Paragraph:
 		w.gap(1.5)
-		w.row(row{cells: []rowCell{{x: left, width: across, lines: w.wrap(body, b.Text, across)}}})
+		w.row(row{cells: []rowCell{{x: w.left, width: w.across, lines: w.wrap(body, b.Text, w.across)}}})
 	case page.Facts:
 		w.facts(b)
 	case page.Table:
 		w.table(b)
+	case page.Gallery:
+		w.gallery(b)
+	case page.Contents:
+		w.contents(b)
 	case page.Signatures:
 		w.signatures(b)
 	}

@@ -14,8 +14,8 @@ type field struct {
 
 // frame draws the border and the title block of a sheet: the data fields of ISO
 // 7200, with blanks to write in where nothing was given.
-func frame(f *fonts, s *sheet, b page.TitleBlock, n, of int) {
-	s.add(box{x: frameLeft, y: frameTop, w: frameRight - frameLeft, h: frameBottom - frameTop, width: 0.5})
+func (w *flow) frame(s *sheet, b page.TitleBlock, n, of int) {
+	s.add(box{x: w.frameLeft, y: w.frameTop, w: w.frameRight - w.frameLeft, h: w.frameBottom - w.frameTop, width: 0.5})
 	rows := [][]field{
 		{{"Legal owner", b.Owner, 0.33}, {"Title", b.Title, 0.67}},
 		{{"Creator", b.Creator, 0.28}, {"Approval person", b.Approver, 0.28}, {"Document type", b.DocumentType, 0.24}, {"Date of issue", b.Date, 0.2}},
@@ -23,12 +23,12 @@ func frame(f *fonts, s *sheet, b page.TitleBlock, n, of int) {
 	}
 	high := blockHeight / float64(len(rows))
 	for i, fields := range rows {
-		y := frameBottom - blockHeight + float64(i)*high
-		s.add(stroke{frameLeft, y, frameRight, y, 0.25, 0})
-		x := frameLeft
+		y := w.frameBottom - blockHeight + float64(i)*high
+		s.add(stroke{w.frameLeft, y, w.frameRight, y, 0.25, 0})
+		x := w.frameLeft
 		for _, d := range fields {
-			wide := d.share * (frameRight - frameLeft)
-			f.field(s, d, x, y, wide, high)
+			wide := d.share * (w.frameRight - w.frameLeft)
+			w.field(s, d, x, y, wide, high)
 			x += wide
 		}
 	}
@@ -36,14 +36,14 @@ func frame(f *fonts, s *sheet, b page.TitleBlock, n, of int) {
 
 // field writes a data field under its label: on one line where that does, else
 // smaller on two.
-func (f *fonts) field(s *sheet, d field, x, y, wide, high float64) {
-	if x > frameLeft {
+func (w *flow) field(s *sheet, d field, x, y, wide, high float64) {
+	if x > w.frameLeft {
 		s.add(stroke{x, y, x, y + high, 0.15, 0})
 	}
-	s.lines(x+1.2, y+0.6, f.fit(label, d.label, wide-2.4, 1))
-	lines := f.wrap(body, d.text, wide-2.4)
+	s.lines(x+1.2, y+0.6, w.fit(label, d.label, wide-2.4, 1))
+	lines := w.wrap(body, d.text, wide-2.4)
 	if len(lines) > 1 {
-		lines = f.fit(small, d.text, wide-2.4, 2)
+		lines = w.fit(small, d.text, wide-2.4, 2)
 	}
 	s.lines(x+1.2, y+3.4, lines)
 }

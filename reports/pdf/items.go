@@ -1,6 +1,7 @@
 package pdf
 
 import (
+	"errors"
 	"fmt"
 	"math"
 
@@ -12,8 +13,16 @@ type sheet struct{ items []item }
 
 // item is a piece of text, a line or a box.
 type item interface {
-	draw(*gofpdf.Fpdf)
+	draw(*painter)
 	numbers() []float64
+}
+
+// painter puts items into a file; it knows where links lead.
+type painter struct {
+	*gofpdf.Fpdf
+	fonts *fonts
+	links map[string]int
+	err   error // what a picture could not draw
 }
 
 // written is text on a base line.
@@ -46,7 +55,7 @@ func (s *sheet) lines(x, y float64, lines []set) {
 }
 
 // paint draws a sheet; a coordinate that is no number is refused.
-func paint(out *gofpdf.Fpdf, s *sheet) error {
+func paint(out *painter, s *sheet) error {
 	for _, i := range s.items {
 		for _, v := range i.numbers() {
 			if math.IsNaN(v) || math.Abs(v) > 1e4 {
@@ -55,12 +64,12 @@ func paint(out *gofpdf.Fpdf, s *sheet) error {
 		}
 		i.draw(out)
 	}
-	return out.Error()
+	return errors.Join(out.err, out.Error())
 }
 
 func (w written) numbers() []float64 { return []float64{w.x, w.y, w.style.size} }
 
-func (w written) draw(out *gofpdf.Fpdf) {
+func (w written) draw(out *painter) {
 	cut := ""
 	if w.style.face == bold {
 		cut = "B"
@@ -76,7 +85,7 @@ func (w written) draw(out *gofpdf.Fpdf) {
 
 func (l stroke) numbers() []float64 { return []float64{l.x1, l.y1, l.x2, l.y2, l.width} }
 
-func (l stroke) draw(out *gofpdf.Fpdf) {
+func (l stroke) draw(out *painter) {
 	out.SetDrawColor(l.grey, l.grey, l.grey)
 	out.SetLineWidth(l.width)
 	out.Line(l.x1, l.y1, l.x2, l.y2)
@@ -84,7 +93,7 @@ func (l stroke) draw(out *gofpdf.Fpdf) {
 
 func (b box) numbers() []float64 { return []float64{b.x, b.y, b.w, b.h, b.width} }
 
-func (b box) draw(out *gofpdf.Fpdf) {
+func (b box) draw(out *painter) {
 	out.SetDrawColor(0, 0, 0)
 	out.SetFillColor(0, 0, 0)
 	out.SetLineWidth(b.width)

@@ -1,4 +1,4 @@
-// Package pdf sets a page model on A4 sheets. It is the only importer of the PDF
+// Package pdf sets a page model on sheets, A4 or Letter. It is the only importer of the PDF
 // library, which is kept behind a guard: text is made fit for the fonts, and
 // coordinates are checked, before anything goes in. The same model gives the same
 // bytes.
@@ -13,6 +13,7 @@ import (
 	"codeberg.org/go-fonts/dejavu/dejavusansbold"
 	"github.com/jung-kurt/gofpdf"
 
+	"kilovet/reports/drawing"
 	"kilovet/reports/page"
 )
 
@@ -20,15 +21,23 @@ import (
 // the clock; the sheets hold none, their date of issue is an input.
 var undated = time.Date(2000, time.January, 1, 0, 0, 0, 0, time.UTC)
 
-// Render sets the document.
-func Render(d *page.Document) ([]byte, error) {
+// Render sets the document on A4.
+func Render(d *page.Document) ([]byte, error) { return RenderOn(A4, d) }
+
+// RenderOn sets the document on a paper.
+func RenderOn(p Paper, d *page.Document) ([]byte, error) {
 	fonts, err := newFonts()
 	if err != nil {
 		return nil, err
 	}
-	sheets := layout(fonts, d)
-	out := blank(fonts, d.Block)
-	for i, s := range sheets {
+	pen, err := drawing.NewPen()
+	if err != nil {
+		return nil, err
+	}
+	w := layout(fonts, p.area(), pen, d)
+	out := &painter{Fpdf: blank(fonts, p, d.Block), fonts: fonts, links: map[string]int{}}
+	w.announce(out)
+	for i, s := range w.sheets {
 		out.AddPage()
 		if err := paint(out, s); err != nil {
 			return nil, fmt.Errorf("pdf: sheet %d: %w", i+1, err)
@@ -62,8 +71,9 @@ func withoutMoment(file []byte, key string, moment time.Time) []byte {
 }
 
 // blank is a file without sheets. The library writes into the fonts it is given.
-func blank(fonts *fonts, block page.TitleBlock) *gofpdf.Fpdf {
-	out := gofpdf.New("P", "mm", "A4", "")
+func blank(fonts *fonts, p Paper, block page.TitleBlock) *gofpdf.Fpdf {
+	width, height := p.size()
+	out := gofpdf.NewCustom(&gofpdf.InitType{OrientationStr: "P", UnitStr: "mm", Size: gofpdf.SizeType{Wd: width, Ht: height}})
 	out.SetCatalogSort(true)
 	out.SetCreationDate(issued(block))
 	out.SetModificationDate(undated)

@@ -9,11 +9,13 @@ import (
 	"regexp"
 	"slices"
 	"strings"
+	"sync"
 	"testing"
 	"unicode/utf16"
 
 	"pgregory.net/rapid"
 
+	"kilovet/reports/drawing"
 	"kilovet/reports/internal/sample"
 	"kilovet/reports/page"
 	"kilovet/rules"
@@ -30,6 +32,19 @@ func testFonts(t testing.TB) *fonts {
 	}
 	return f
 }
+
+var a4 = A4.area()
+
+// testPen draws for all tests, one after the other.
+var testPen = sync.OnceValue(func() *drawing.Pen {
+	pen, err := drawing.NewPen()
+	if err != nil {
+		panic(err)
+	}
+	return pen
+})
+
+func sheetsOf(f *fonts, d *page.Document) []*sheet { return layout(f, a4, testPen(), d).sheets }
 
 func render(t testing.TB, d *page.Document) []byte {
 	t.Helper()
@@ -69,16 +84,16 @@ func places(f *fonts, s *sheet) []place {
 func TestTextNeitherLeavesTheFrameNorCollides(t *testing.T) {
 	f := testFonts(t)
 	for name, r := range samples {
-		for n, s := range layout(f, page.New(r)) {
-			checkPlaces(t, fmt.Sprintf("%s, sheet %d", name, n+1), places(f, s))
+		for n, s := range sheetsOf(f, page.New(r)) {
+			checkPlaces(t, fmt.Sprintf("%s, sheet %d", name, n+1), a4, places(f, s))
 		}
 	}
 }
 
-func checkPlaces(t *testing.T, where string, all []place) {
+func checkPlaces(t *testing.T, where string, a area, all []place) {
 	t.Helper()
 	for i, p := range all {
-		if p.left < frameLeft || p.right > frameRight || p.top < frameTop || p.bottom > frameBottom {
+		if p.left < a.frameLeft || p.right > a.frameRight || p.top < a.frameTop || p.bottom > a.frameBottom {
 			t.Errorf("%s: %q leaves the frame", where, p.text)
 		}
 		for _, q := range all[:i] {
@@ -91,14 +106,14 @@ func checkPlaces(t *testing.T, where string, all []place) {
 
 func TestBodyStaysClearOfTheTitleBlock(t *testing.T) {
 	f := testFonts(t)
-	w := &flow{fonts: f}
+	w := newFlow(f, a4, testPen())
 	w.turn()
 	for _, s := range page.New(sample.Hard()).Sections {
 		w.section(s)
 	}
 	for n, s := range w.sheets {
 		for _, p := range places(f, s) {
-			if p.bottom > bottom || p.left < left || p.right > right+0.01 {
+			if p.bottom > a4.bottom || p.left < a4.left || p.right > a4.right+0.01 {
 				t.Errorf("sheet %d: %q leaves the body", n+1, p.text)
 			}
 		}
@@ -119,13 +134,13 @@ func TestTablesOfAnyHeightStayInTheBody(t *testing.T) {
 			}
 			table.Rows = append(table.Rows, page.Row{Under: rapid.Bool().Draw(t, "under"), Cells: []page.Cell{{Verdict: "fails"}, {Lines: tall("cell")}}})
 		}
-		w := &flow{fonts: f}
+		w := newFlow(f, a4, testPen())
 		w.turn()
 		w.table(table)
 		for n, s := range w.sheets {
 			for _, p := range places(f, s) {
-				if p.bottom > bottom+0.01 {
-					t.Fatalf("sheet %d: %q ends at %g of %g", n+1, p.text, p.bottom, bottom)
+				if p.bottom > a4.bottom+0.01 {
+					t.Fatalf("sheet %d: %q ends at %g of %g", n+1, p.text, p.bottom, a4.bottom)
 				}
 			}
 		}
@@ -135,7 +150,7 @@ func TestTablesOfAnyHeightStayInTheBody(t *testing.T) {
 func TestEverySheetBearsItsNumberAndTheTitleBlock(t *testing.T) {
 	f := testFonts(t)
 	for name, r := range samples {
-		sheets := layout(f, page.New(r))
+		sheets := sheetsOf(f, page.New(r))
 		for i, s := range sheets {
 			text := strings.Join(words(s), "\n")
 			for _, want := range []string{fmt.Sprintf("%d of %d", i+1, len(sheets)), "Legal owner", "Identification number", "Revision index", "Date of issue", "Title", "Creator", "Approval person", "Document type"} {
@@ -150,7 +165,7 @@ func TestEverySheetBearsItsNumberAndTheTitleBlock(t *testing.T) {
 func TestSignaturesStandWithWhatTheySign(t *testing.T) {
 	f := testFonts(t)
 	for name, r := range samples {
-		sheets := layout(f, page.New(r))
+		sheets := sheetsOf(f, page.New(r))
 		last := strings.Join(words(sheets[len(sheets)-1]), " ")
 		for _, want := range []string{"Sign-off", "Prepared", "Checked", "Approved"} {
 			if !strings.Contains(last, want) {
@@ -176,7 +191,7 @@ func words(s *sheet) []string {
 }
 
 func TestFirstSheetAnswers(t *testing.T) {
-	text := strings.Join(words(layout(testFonts(t), page.New(sample.Failing()))[0]), " ")
+	text := strings.Join(words(sheetsOf(testFonts(t), page.New(sample.Failing()))[0]), " ")
 	for _, want := range []string{"FAILS", "Do not switch on", "spacing.creepage", "rating.cable", "drive.peak_limit", "Local electrical codes"} {
 		if !strings.Contains(text, want) {
 			t.Errorf("%q is not on the first sheet: %s", want, text)
@@ -188,7 +203,7 @@ func TestFirstSheetAnswers(t *testing.T) {
 func TestFirstSectionFillsOneSheet(t *testing.T) {
 	f := testFonts(t)
 	for name, r := range samples {
-		w := &flow{fonts: f}
+		w := newFlow(f, a4, testPen())
 		w.turn()
 		w.section(page.New(r).Noted("Built-in example: no file was named").Sections[0])
 		if len(w.sheets) != 1 {
@@ -202,13 +217,13 @@ func TestFirstSectionFillsOneSheet(t *testing.T) {
 	for i := range 40 {
 		r.Findings = append(r.Findings, rule.Finding{Rule: fmt.Sprintf("rating.%d", i), Verdict: rule.Fails, Concern: rule.Equipment, Because: "Too little."})
 	}
-	w := &flow{fonts: f}
+	w := newFlow(f, a4, testPen())
 	w.turn()
 	w.section(page.New(r).Sections[0])
 	text := strings.Join(words(w.sheets[0]), " ")
 	shown := strings.Count(text, "rating.")
-	if want := fmt.Sprintf("And %d rules more", 43-shown-1); len(w.sheets) != 1 || bottom-w.y > 15 || !strings.Contains(text, want) {
-		t.Errorf("%d sheets, %g mm left, want %q in: %s", len(w.sheets), bottom-w.y, want, text)
+	if want := fmt.Sprintf("And %d rules more", 43-shown-1); len(w.sheets) != 1 || a4.bottom-w.y > 15 || !strings.Contains(text, want) {
+		t.Errorf("%d sheets, %g mm left, want %q in: %s", len(w.sheets), a4.bottom-w.y, want, text)
 	}
 }
 
@@ -232,7 +247,7 @@ func TestNothingIsLostOnTheWayToTheSheets(t *testing.T) {
 	f := testFonts(t)
 	for name, r := range samples {
 		var all strings.Builder
-		for _, s := range layout(f, page.New(r)) {
+		for _, s := range sheetsOf(f, page.New(r)) {
 			all.WriteString(squeezed(strings.Join(words(s), "")))
 		}
 		for _, finding := range r.Findings {
@@ -338,7 +353,7 @@ func TestCutTextShowsIt(t *testing.T) {
 
 func TestACoordinateThatIsNoNumberIsRefused(t *testing.T) {
 	for _, v := range []float64{math.NaN(), math.Inf(1)} {
-		out := blank(testFonts(t), page.TitleBlock{})
+		out := &painter{Fpdf: blank(testFonts(t), A4, page.TitleBlock{})}
 		out.AddPage()
 		s := &sheet{}
 		s.add(stroke{0, 0, v, 1, 0.1, 0})
@@ -374,8 +389,8 @@ func FuzzSheets(f *testing.F) {
 		r.Heading.Title, r.Heading.Approver, r.Deference = text, text, strings.Repeat(text, min(max(n, 0), 50))
 		r.Findings[0].Subject, r.Findings[0].Because, r.Findings[0].Under = text, text, text
 		fonts := testFonts(t)
-		for n, s := range layout(fonts, page.New(r)) {
-			checkPlaces(t, fmt.Sprintf("sheet %d", n+1), places(fonts, s))
+		for n, s := range sheetsOf(fonts, page.New(r)) {
+			checkPlaces(t, fmt.Sprintf("sheet %d", n+1), a4, places(fonts, s))
 			for _, i := range s.items {
 				if w, ok := i.(written); ok && fonts.guard(w.style.face, w.text) != w.text {
 					t.Errorf("%q was not guarded", w.text)

@@ -10,6 +10,7 @@ type row struct {
 	group bool    // stays with the row after it
 	pad   float64 // above and below the text
 	again func()  // what to repeat at the top of a sheet the row goes on to
+	to    string  // what links lead to
 }
 
 // rowCell is lines of text, or a verdict, in its place.
@@ -41,13 +42,13 @@ func (r row) height() float64 {
 // row places a row whole where a sheet can hold it, and otherwise as much of it as
 // fits on each sheet.
 func (w *flow) row(r row) {
-	if r.height() <= bottom-top-keep {
+	if r.height() <= w.bottom-w.top-keep {
 		w.begin(r, r.height())
 		w.place(r)
 		return
 	}
-	for r.height() > bottom-w.y {
-		now, later := r.split(bottom - w.y)
+	for r.height() > w.bottom-w.y {
+		now, later := r.split(w.bottom - w.y)
 		if now.height() > 2*r.pad {
 			w.place(now)
 		}
@@ -61,7 +62,7 @@ func (w *flow) row(r row) {
 // begin turns the sheet where the height is not left and repeats what is to stand
 // on top.
 func (w *flow) begin(r row, height float64) {
-	if w.y+height > bottom && !w.fresh() {
+	if w.y+height > w.bottom && !w.fresh() {
 		w.turn()
 		r.repeat()
 	}
@@ -106,6 +107,7 @@ func (c rowCell) split(room float64) (now, later rowCell) {
 // place draws a row at the present height.
 func (w *flow) place(r row) {
 	s := w.sheet()
+	w.anchor(r.to, w.y)
 	for _, c := range r.cells {
 		switch {
 		case c.verdict != "":
@@ -114,21 +116,29 @@ func (w *flow) place(r row) {
 			w.rightward(c, w.y+r.pad)
 		default:
 			s.lines(c.x, w.y+r.pad, c.lines)
+			w.links(c.x, w.y+r.pad, c.lines)
 		}
 	}
 	h := r.height()
 	if r.bar {
-		s.add(stroke{left, w.y, left, w.y + h, 0.7, 0})
+		s.add(stroke{w.left, w.y, w.left, w.y + h, 0.7, 0})
 	}
 	w.y += h
 	if r.ruled {
-		s.add(stroke{left, w.y, right, w.y, 0.1, 120})
+		s.add(stroke{w.left, w.y, w.right, w.y, 0.1, 120})
 	}
 }
 
 func (w *flow) rightward(c rowCell, y float64) {
 	for _, l := range c.lines {
-		w.sheet().add(written{x: c.x + c.width - w.width(l.style, l.text), y: y + l.style.size*points, set: l})
+		x := c.x + c.width - w.width(l.style, l.text)
+		if l.sheet != "" {
+			x = c.x + c.width - w.width(l.style, widestNumber)
+			w.sheet().add(&reference{x: x, y: y + l.style.size*points, right: c.x + c.width, style: l.style, to: l.sheet})
+		} else {
+			w.sheet().add(written{x: x, y: y + l.style.size*points, set: l})
+		}
+		w.links(x, y, []set{l})
 		y += l.style.leading()
 	}
 }

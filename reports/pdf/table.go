@@ -17,10 +17,16 @@ func (w *flow) table(t page.Table) {
 	w.gap(3)
 	head := func() { w.head(t.Columns) }
 	rows := w.tableRows(t, head)
-	w.room(10 + together(rows, 0))
+	title := append(w.wrap(strong, t.Title, w.across), w.wrap(small, t.Note, w.across)...)
+	w.room(min(height(title)+11+together(rows, 0), w.bottom-w.top-keep))
+	w.anchor(t.Anchor, w.y)
+	w.row(row{cells: []rowCell{{x: w.left, width: w.across, lines: title}}})
+	if len(title) > 0 {
+		w.y += 1
+	}
 	head()
 	for i, r := range rows {
-		w.begin(r, min(together(rows, i), bottom-top-keep))
+		w.begin(r, min(together(rows, i), w.bottom-w.top-keep))
 		w.row(r)
 	}
 	w.y += 1
@@ -29,7 +35,7 @@ func (w *flow) table(t page.Table) {
 // filled is the table cut to the rows that the sheet holds beside what follows it, at
 // least one, with a row that counts the others.
 func (w *flow) filled(t page.Table, after float64) page.Table {
-	room := bottom - after - w.y - 4 - headHeight
+	room := w.bottom - after - w.y - 4 - headHeight
 	rows := w.tableRows(t, func() {})
 	heights := func(upTo int) (sum float64) {
 		for _, r := range rows[:upTo] {
@@ -54,15 +60,15 @@ const headHeight = 9.0
 
 // head is the titles of the columns between two lines.
 func (w *flow) head(columns []page.Column) {
-	w.sheet().add(stroke{left, w.y, right, w.y, 0.35, 0})
+	w.sheet().add(stroke{w.left, w.y, w.right, w.y, 0.35, 0})
 	titles := row{pad: 1}
-	x := left
+	x := w.left
 	for _, c := range columns {
-		titles.cells = append(titles.cells, rowCell{x: x, width: c.Share*across - gutter, lines: w.fit(column, c.Title, c.Share*across-gutter, 2), right: c.Right})
-		x += c.Share * across
+		titles.cells = append(titles.cells, rowCell{x: x, width: c.Share*w.across - gutter, lines: w.fit(column, c.Title, c.Share*w.across-gutter, 2), right: c.Right})
+		x += c.Share * w.across
 	}
 	w.place(titles)
-	w.sheet().add(stroke{left, w.y, right, w.y, 0.2, 0})
+	w.sheet().add(stroke{w.left, w.y, w.right, w.y, 0.2, 0})
 }
 
 // tableRows sets the rows; one that goes on to another sheet has the titles, and
@@ -72,7 +78,7 @@ func (w *flow) tableRows(t page.Table, head func()) []row {
 	var group row
 	for i, r := range t.Rows {
 		alone := i+1 == len(t.Rows) || !t.Rows[i+1].Under
-		set := row{cells: w.tableCells(t.Columns, r), pad: 0.7, ruled: !r.Group || alone, again: head, group: r.Group}
+		set := row{cells: w.tableCells(t.Columns, r), pad: 0.7, ruled: !r.Group || alone, again: head, group: r.Group, to: r.Anchor}
 		if r.Group {
 			group = set
 		}
@@ -86,14 +92,14 @@ func (w *flow) tableRows(t page.Table, head func()) []row {
 
 func (w *flow) tableCells(columns []page.Column, r page.Row) []rowCell {
 	if r.Group {
-		return []rowCell{{x: left, width: across, lines: w.cell(r.Cells[0].Lines, across)}}
+		return []rowCell{{x: w.left, width: w.across, lines: w.cell(r.Cells[0].Lines, w.across)}}
 	}
 	var cells []rowCell
-	x := left
+	x := w.left
 	for i, c := range r.Cells {
-		wide := columns[i].Share*across - gutter
+		wide := columns[i].Share*w.across - gutter
 		cells = append(cells, rowCell{x: x, width: wide, lines: w.cell(c.Lines, wide), right: columns[i].Right, verdict: c.Verdict})
-		x += columns[i].Share * across
+		x += columns[i].Share * w.across
 	}
 	return cells
 }

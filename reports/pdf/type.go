@@ -42,6 +42,8 @@ func styleOf(w page.Weight) style {
 type set struct {
 	style style
 	text  string
+	links []page.Link
+	sheet string // an anchor; the number of its sheet stands in place of the text
 }
 
 // wrap breaks a text into lines of a width: at spaces, in a word too long for a
@@ -55,18 +57,18 @@ func (f *fonts) wrap(t style, s string, width float64) []set {
 			continue
 		}
 		if line != "" {
-			lines = append(lines, set{t, line})
+			lines = append(lines, set{style: t, text: line})
 		}
 		line = w
 		for f.width(t, line) > width {
 			at := f.joint(t, line, width)
-			lines, line = append(lines, set{t, line[:at]}), line[at:]
+			lines, line = append(lines, set{style: t, text: line[:at]}), line[at:]
 		}
 	}
 	if line == "" {
 		return lines
 	}
-	return append(lines, set{t, line})
+	return append(lines, set{style: t, text: line})
 }
 
 // joint is where to break a word that is longer than the width: after the last
@@ -108,7 +110,15 @@ func (f *fonts) fit(t style, s string, width float64, most int) []set {
 func (f *fonts) cell(lines []page.Line, width float64) []set {
 	var all []set
 	for _, l := range lines {
-		all = append(all, f.wrap(styleOf(l.Weight), l.Text, width)...)
+		t := styleOf(l.Weight)
+		if l.Sheet != "" {
+			all = append(all, set{style: t, links: l.Links, sheet: l.Sheet})
+			continue
+		}
+		for _, s := range f.wrap(t, l.Text, width) {
+			s.links = l.Links
+			all = append(all, s)
+		}
 	}
 	return all
 }

@@ -36,6 +36,8 @@ func Hard() *rules.Review {
 	r.Cautions = append(r.Cautions, rule.Caution{Subject: LongName, Text: long}, rule.Caution{Subject: Foreign, Text: Foreign})
 	r.PassedOver = append(r.PassedOver, rule.PassedOver{Rule: LongName, Because: long})
 	r.Assumptions = append(r.Assumptions, long, LongName+LongName+LongName)
+	r.Curves, r.Tables = Curves(), Tables()
+	r.Diagram = Diagram(60)
 	return r
 }
 

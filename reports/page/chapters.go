@@ -1,0 +1,207 @@
+package page
+
+import (
+	"fmt"
+	"slices"
+	"strings"
+
+	"kilovet/reports/digest"
+	"kilovet/rules/diagram"
+	"kilovet/rules/exhibit"
+	"kilovet/rules/rule"
+)
+
+// chapters is one section for each part of the chain that there is something to say of.
+func (n *writer) chapters() []Section {
+	var all []Section
+	for _, c := range n.parts {
+		var blocks []Block
+		if c.Of == exhibit.Chain {
+			blocks = append(blocks, n.schematic()...)
+		}
+		blocks = append(blocks, n.curves(c)...)
+		blocks = append(blocks, n.findings(c)...)
+		blocks = append(blocks, n.tables(c)...)
+		blocks = append(blocks, figures(c.Figures)...)
+		if len(blocks) > 0 {
+			all = append(all, Section{Title: c.Title, Anchor: "chapter " + string(c.Of), Fresh: len(all) == 0, Blocks: blocks})
+		}
+	}
+	return all
+}
+
+// schematic is the drawing of the chain with what its flags mean.
+func (n *writer) schematic() []Block {
+	d := n.review.Diagram
+	if d == nil {
+		return nil
+	}
+	f := Figure{Anchor: schematic, Label: n.labels[schematic], Diagram: d, Wide: true, Spots: map[string]string{}, Caption: schematicCaption(d)}
+	for _, m := range d.Marks {
+		for _, p := range d.Parts() {
+			if p.Mark == m.Number {
+				f.Spots[p.Name] = n.markAnchor(m)
+			}
+		}
+		f.Spots[m.Subject] = n.markAnchor(m)
+	}
+	blocks := []Block{Gallery{[]Figure{f}}}
+	if len(d.Marks) > 0 {
+		blocks = append(blocks, n.flags(d))
+	}
+	return blocks
+}
+
+func schematicCaption(d *diagram.Diagram) string {
+	text := "Schematic, drawn from the description. Potentials are means to ground in the working state, in volts with SI prefixes."
+	if d.Unknown != "" {
+		text = "Schematic, drawn from the description. Potentials are not known: " + d.Unknown + "."
+	}
+	text += " Strays and leakage of clamps are not drawn."
+	switch {
+	case d.Elsewhere == 1:
+		text += " 1 finding speaks of what is not drawn here."
+	case d.Elsewhere > 1:
+		text += fmt.Sprintf(" %d findings speak of what is not drawn here.", d.Elsewhere)
+	}
+	return text
+}
+
+func (n *writer) markAnchor(m diagram.Mark) string {
+	for _, id := range m.Rules {
+		if to := n.anchors[about{id, m.Subject}]; to != "" {
+			return to
+		}
+	}
+	return ""
+}
+
+// flags explains the numbers on the schematic.
+func (n *writer) flags(d *diagram.Diagram) Table {
+	t := Table{Title: "Flags of the schematic", Columns: []Column{{Title: "Flag", Share: 0.08}, {Title: "Verdict", Share: 0.15}, {Title: "Part or node", Share: 0.3}, {Title: "Rules", Share: 0.38}, {Title: "Sheet", Share: 0.09, Right: true}}}
+	for _, m := range d.Marks {
+		names := plain(strings.Join(m.Rules, ", "))
+		for i, id := range m.Rules {
+			word := id
+			if i+1 < len(m.Rules) {
+				word += ","
+			}
+			names.Links = append(names.Links, Link{word, n.anchors[about{id, m.Subject}]})
+		}
+		to := n.markAnchor(m)
+		t.Rows = append(t.Rows, Row{Cells: []Cell{lines(strong(fmt.Sprint(m.Number))), {Verdict: m.Verdict}, lines(plain(m.Subject)), lines(names), {Lines: []Line{{Sheet: to, Links: []Link{{To: to}}}}}}})
+	}
+	return t
+}
+
+// mostKeys is how many lines, levels and marks a curve of half the width may have.
+const mostKeys = 8
+
+// curves is the pictures of a chapter.
+func (n *writer) curves(c digest.Chapter) []Block {
+	if len(c.Curves) == 0 {
+		return nil
+	}
+	var g Gallery
+	for i := range c.Curves {
+		curve := &c.Curves[i]
+		to := anchor("curve", curve.ID, curve.Subject)
+		wide := len(curve.Lines)+len(curve.Levels)+len(curve.Marks) > mostKeys
+		g.Figures = append(g.Figures, Figure{Anchor: to, Label: n.labels[to], Caption: caption(curve.Title, curve.Subject, curve.Basis, curve.Note), Curve: curve, Wide: wide})
+	}
+	return []Block{g}
+}
+
+func caption(title, subject, basis, note string) string {
+	if subject != "" {
+		title += ", " + subject
+	}
+	text := title + "."
+	if note != "" {
+		text += " " + strings.TrimSuffix(note, ".") + "."
+	}
+	if basis != "" {
+		text += " Basis: " + basis + "."
+	}
+	return text
+}
+
+// findings is the table of the findings of a chapter, the worst first.
+func (n *writer) findings(c digest.Chapter) []Block {
+	if len(c.Findings) == 0 {
+		return nil
+	}
+	t := Table{Title: "Findings", Columns: []Column{{Title: "Verdict", Share: 0.14}, {Title: "Rule and subject", Share: 0.25}, {Title: "Amounts", Share: 0.2}, {Title: "Reason and remedy", Share: 0.41}}}
+	for _, f := range c.Findings {
+		needed, provided := digest.Labels(f)
+		t.Rows = append(t.Rows, Row{Anchor: n.anchorOf(f), Cells: []Cell{
+			{Verdict: f.Verdict},
+			lines(strong(f.Rule), plain(f.Subject), small("concerns "+string(f.Concern)), small(digest.Line(f))),
+			lines(labelled(needed, digest.Needed(f)), labelled(provided, digest.Provided(f)), labelled("margin", digest.Margin(f)), labelledSmall("under", f.Under)),
+			n.reasons(c, f),
+		}})
+	}
+	return []Block{t}
+}
+
+func (n *writer) reasons(c digest.Chapter, f rule.Finding) Cell {
+	all := []Line{plain(f.Because), labelled("Remedy:", f.Remedy), labelled("Missing:", strings.Join(f.Missing, ", "))}
+	for _, a := range f.Assumptions {
+		all = append(all, labelled("Assumed:", a))
+	}
+	return lines(append(all, n.sourceLine(f), n.seenLine(c, f))...)
+}
+
+// tables is the tables of a chapter.
+func (n *writer) tables(c digest.Chapter) []Block {
+	var all []Block
+	for _, t := range c.Tables {
+		to := anchor("table", t.ID, t.Subject)
+		title := n.labels[to] + ": " + t.Title
+		if t.Subject != "" {
+			title += ", " + t.Subject
+		}
+		out := Table{Title: title, Note: tableNote(t), Anchor: to, Columns: columns(t)}
+		for _, row := range t.Rows {
+			var cells []Cell
+			for i, cell := range row {
+				cells = append(cells, lines(plain(digest.Cell(t.Columns[i].Unit, cell.Value, cell.Text))))
+			}
+			out.Rows = append(out.Rows, Row{Cells: cells})
+		}
+		all = append(all, out)
+	}
+	return all
+}
+
+func tableNote(t exhibit.Table) string {
+	text := ""
+	if t.Note != "" {
+		text = strings.TrimSuffix(t.Note, ".") + ". "
+	}
+	if t.Basis != "" {
+		text += "Basis: " + t.Basis + "."
+	}
+	return text
+}
+
+// columns shares the width of a table by how long its texts are.
+func columns(t exhibit.Table) []Column {
+	const least, most = 7, 34 // runes
+	lengths := make([]int, len(t.Columns))
+	sum := 0
+	for i, c := range t.Columns {
+		lengths[i] = len([]rune(c.Head))
+		for _, row := range t.Rows {
+			lengths[i] = max(lengths[i], len([]rune(digest.Cell(c.Unit, row[i].Value, row[i].Text))))
+		}
+		lengths[i] = min(max(lengths[i], least), most)
+		sum += lengths[i]
+	}
+	var all []Column
+	for i, c := range t.Columns {
+		numbers := !slices.ContainsFunc(t.Rows, func(row []exhibit.Cell) bool { return row[i].Value == nil && row[i].Text != "" })
+		all = append(all, Column{Title: c.Head, Share: float64(lengths[i]) / float64(sum), Right: numbers && c.Unit != ""})
+	}
+	return all
+}

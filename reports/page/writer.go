@@ -1,0 +1,151 @@
+package page
+
+import (
+	"fmt"
+	"slices"
+	"strings"
+
+	"kilovet/reports/digest"
+	"kilovet/rules"
+	"kilovet/rules/figure"
+	"kilovet/rules/rule"
+)
+
+// writer lays out one review; it knows where links lead.
+type writer struct {
+	review  *rules.Review
+	parts   []digest.Chapter
+	sources []rule.Source
+	labels  map[string]string // of figures and tables, by anchor
+	anchors map[about]string  // of findings
+	beside  map[string]bool   // ids of figures set beside others of their family
+}
+
+// about is what a finding speaks of.
+type about struct{ rule, subject string }
+
+func newWriter(r *rules.Review) *writer {
+	n := &writer{review: r, parts: digest.Chapters(r), sources: digest.Sources(r), labels: map[string]string{}, anchors: map[about]string{}, beside: besides(r.Figures)}
+	for i, f := range digest.Sorted(r.Findings) {
+		n.anchors[about{f.Rule, f.Subject}] = fmt.Sprintf("finding-%d", i+1)
+	}
+	n.number()
+	return n
+}
+
+func (n *writer) anchorOf(f rule.Finding) string { return n.anchors[about{f.Rule, f.Subject}] }
+
+// number gives figures and tables their labels in the order in which they stand.
+func (n *writer) number() {
+	figures, tables := 0, 0
+	if n.review.Diagram != nil {
+		figures++
+		n.labels[schematic] = fmt.Sprintf("Figure %d", figures)
+	}
+	for _, c := range n.parts {
+		for _, curve := range c.Curves {
+			figures++
+			n.labels[anchor("curve", curve.ID, curve.Subject)] = fmt.Sprintf("Figure %d", figures)
+		}
+		for _, t := range c.Tables {
+			tables++
+			n.labels[anchor("table", t.ID, t.Subject)] = fmt.Sprintf("Table %d", tables)
+		}
+	}
+}
+
+// schematic is the anchor of the schematic.
+const schematic = "schematic"
+
+// anchor names what links lead to.
+func anchor(kind, id, subject string) string { return kind + " " + id + " " + subject }
+
+func sourceAnchor(n int) string { return fmt.Sprintf("source %d", n) }
+
+// sourceWord stands for a source in a finding.
+func sourceWord(n int) string { return fmt.Sprintf("[%d]", n) }
+
+// sourceLine refers to the sources of a finding by their numbers; those that judged are
+// named first.
+func (n *writer) sourceLine(f rule.Finding) Line {
+	var governing, others []string
+	l := small("")
+	for _, s := range f.Sources {
+		k := digest.SourceNumber(n.sources, s)
+		l.Links = append(l.Links, Link{sourceWord(k), sourceAnchor(k)})
+		if s.Governs {
+			governing = append(governing, sourceWord(k))
+		} else {
+			others = append(others, sourceWord(k))
+		}
+	}
+	var texts []string
+	if len(governing) > 0 {
+		texts = append(texts, "judged by "+strings.Join(governing, " "))
+	}
+	if len(others) > 0 {
+		texts = append(texts, "see also "+strings.Join(others, " "))
+	}
+	l.Text = strings.Join(texts, "; ")
+	return l
+}
+
+// mostSeen is how many figures a finding refers to beside pictures and tables.
+const mostSeen = 2
+
+// seenLine refers to what is shown and computed of the subject of a finding.
+func (n *writer) seenLine(c digest.Chapter, f rule.Finding) Line {
+	var links []Link
+	var words []string
+	see := func(word, to string) {
+		words = append(words, word)
+		links = append(links, Link{word[strings.LastIndex(word, " ")+1:], to})
+	}
+	for _, curve := range c.Curves {
+		if to := anchor("curve", curve.ID, curve.Subject); speaksOf(curve.Subject, f.Subject) {
+			see(n.labels[to], to)
+		}
+	}
+	for _, t := range c.Tables {
+		if to := anchor("table", t.ID, t.Subject); speaksOf(t.Subject, f.Subject) {
+			see(n.labels[to], to)
+		}
+	}
+	for _, fig := range nearest(c.Figures, f) {
+		family, _, _ := strings.Cut(fig.ID, ".")
+		if n.beside[fig.ID] {
+			see("figures", anchor("figures", family, fig.Subject))
+			break
+		}
+		see(fig.ID, anchor("figure", fig.ID, fig.Subject))
+	}
+	if len(words) == 0 {
+		return small("")
+	}
+	return Line{Text: "see " + strings.Join(words, ", "), Weight: Small, Links: links}
+}
+
+// nearest are the figures about the subject of a finding, one of each id; those first
+// whose name shares a word with the rule's.
+func nearest(figures []figure.Figure, f rule.Finding) []figure.Figure {
+	var first, then []figure.Figure
+	rule := strings.Split(heading(f.Rule), " ")
+	for _, fig := range figures {
+		known := func(o figure.Figure) bool { return o.ID == fig.ID }
+		switch {
+		case !speaksOf(fig.Subject, f.Subject) || slices.ContainsFunc(append(first, then...), known):
+		case slices.ContainsFunc(strings.Fields(heading(fig.ID)), func(w string) bool { return slices.Contains(rule, w) }):
+			first = append(first, fig)
+		default:
+			then = append(then, fig)
+		}
+	}
+	all := append(first, then...)
+	return all[:min(len(all), mostSeen)]
+}
+
+// speaksOf reports whether a figure of one subject tells of another: of the same part,
+// or of one of those it stands for.
+func speaksOf(of, subject string) bool {
+	return subject != "" && (of == subject || strings.HasPrefix(of, subject+"."))
+}

@@ -1,0 +1,132 @@
+package pdf
+
+import (
+	"gonum.org/v1/plot/vg"
+
+	"kilovet/reports/drawing"
+	"kilovet/reports/page"
+)
+
+// Sizes of a gallery in millimetres.
+const (
+	figureGap  = 6.0 // between two figures
+	captionGap = 1.5 // between a picture and its caption
+)
+
+// framed is a picture with its caption, ready to be placed.
+type framed struct {
+	page.Figure
+	picture       *drawing.Picture
+	scale         float64
+	width, height float64 // of the picture at its scale
+	caption       []set
+}
+
+func (f framed) tall() float64 { return f.height + captionGap + height(f.caption) }
+
+// gallery sets figures under each other, two beside each other where they are narrow.
+func (w *flow) gallery(g page.Gallery) {
+	for rest := g.Figures; len(rest) > 0; {
+		row := w.nextRow(rest)
+		w.figures(row...)
+		rest = rest[len(row):]
+	}
+}
+
+// nextRow draws the first of some figures, and the one beside it if there is one.
+func (w *flow) nextRow(figures []page.Figure) []framed {
+	half := (w.across - figureGap) / 2
+	if f := figures[0]; f.Wide || len(figures) == 1 || figures[1].Wide {
+		return []framed{w.framed(f, w.lone(f))}
+	}
+	return []framed{w.framed(figures[0], half), w.framed(figures[1], half)}
+}
+
+// firstRow is the height of the first row.
+func (w *flow) firstRow(g page.Gallery) float64 { return tallest(w.nextRow(g.Figures)) }
+
+func tallest(row []framed) float64 {
+	most := 0.0
+	for _, f := range row {
+		most = max(most, f.tall())
+	}
+	return most
+}
+
+// lone is the width of a figure that stands alone: of a curve, where little is to be
+// explained, not the whole.
+func (w *flow) lone(f page.Figure) float64 {
+	if f.Wide {
+		return w.across
+	}
+	return w.across * 0.7
+}
+
+// figures places figures beside each other, all on one sheet.
+func (w *flow) figures(all ...framed) {
+	most := tallest(all)
+	w.gap(3)
+	w.room(most)
+	x := w.left
+	for _, f := range all {
+		w.anchor(f.Anchor, w.y)
+		w.sheet().add(picture{x, w.y, f.scale, f.picture})
+		w.spots(f, x, w.y)
+		w.sheet().lines(x, w.y+f.height+captionGap, f.caption)
+		x += f.width + figureGap
+	}
+	w.y += most + 1
+}
+
+// framed draws a figure for a width; it is made smaller where a sheet would not hold it.
+func (w *flow) framed(f page.Figure, width float64) framed {
+	out := framed{Figure: f, caption: w.caption(f, width)}
+	room := w.bottom - w.top - captionGap - height(out.caption) - 14
+	if f.Diagram != nil {
+		out.picture = w.pen.SchematicIn(f.Diagram, millimetres(width), millimetres(room))
+	} else {
+		out.picture = w.pen.Curve(*f.Curve, millimetres(width))
+	}
+	out.scale = out.picture.Scale(millimetres(width), millimetres(room))
+	out.width, out.height = width, float64(out.picture.Height/vg.Millimeter)*out.scale
+	return out
+}
+
+func (w *flow) caption(f page.Figure, width float64) []set {
+	label := w.wrap(tag, f.Label, width)
+	return append(label, w.wrap(small, f.Caption, width)...)
+}
+
+// spots makes what is shown in a picture lead to what is said of it.
+func (w *flow) spots(f framed, x, y float64) {
+	if len(f.Spots) == 0 {
+		return
+	}
+	for _, s := range f.picture.Spots() {
+		if to := f.Spots[s.Of]; to != "" {
+			low, high := inMillimetres(s.Area.Min), inMillimetres(s.Area.Max)
+			w.sheet().add(jump{x + low[0]*f.scale, y + f.height - high[1]*f.scale, (high[0] - low[0]) * f.scale, (high[1] - low[1]) * f.scale, to})
+		}
+	}
+}
+
+func inMillimetres(p vg.Point) [2]float64 {
+	return [2]float64{float64(p.X / vg.Millimeter), float64(p.Y / vg.Millimeter)}
+}
+
+func millimetres(v float64) vg.Length { return vg.Length(v) * vg.Millimeter }
+
+// picture is a drawing with its top left corner at a place.
+type picture struct {
+	x, y, scale float64
+	drawn       *drawing.Picture
+}
+
+func (p picture) numbers() []float64 { return []float64{p.x, p.y, p.scale} }
+
+func (p picture) draw(out *painter) {
+	c := newCanvas(out, p.x, p.y+float64(p.drawn.Height/vg.Millimeter)*p.scale, p.scale)
+	p.drawn.Draw(c)
+	out.SetDashPattern(nil, 0)
+	out.err = c.err
+}

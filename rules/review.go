@@ -6,6 +6,7 @@ import (
 	"kilovet/rules/diagram"
 	"kilovet/rules/exhibit"
 	"kilovet/rules/figure"
+	"kilovet/rules/local"
 	"kilovet/rules/rule"
 )
 
@@ -25,6 +26,7 @@ type Review struct {
 	Cautions    []rule.Caution
 	PassedOver  []rule.PassedOver
 	Assumptions []string
+	Local       []local.Outcome // what became of local limits
 	Curves      []exhibit.Curve
 	Tables      []exhibit.Table
 	// Diagram is the circuit ready to be drawn, its findings marked.

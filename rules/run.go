@@ -2,8 +2,10 @@ package rules
 
 import (
 	"kilovet/hv/chain"
+	"kilovet/hv/document"
 	"kilovet/rules/diagram"
 	"kilovet/rules/evidence"
+	"kilovet/rules/local"
 	"kilovet/rules/optics"
 	"kilovet/rules/parts"
 	"kilovet/rules/people"
@@ -26,6 +28,13 @@ func All() []rule.Rule {
 // Run reviews a chain: computes its figures, judges it by every rule, and gives the
 // result as plain data. It neither reads files nor asks for the time.
 func Run(c *chain.Chain, inputs []Input, program Program) *Review {
+	r, _ := RunUnder(c, inputs, program, nil)
+	return r
+}
+
+// RunUnder is Run under local limits, none where they are nil. The faults are those of
+// the file of local limits that only show against this chain; there is no review then.
+func RunUnder(c *chain.Chain, inputs []Input, program Program, limits *local.File) (*Review, document.Faults) {
 	e := evidence.New(c)
 	r := &Review{Program: program, Inputs: inputs, Heading: heading(c), Deference: deference}
 	for _, rl := range All() {
@@ -35,15 +44,18 @@ func Run(c *chain.Chain, inputs []Input, program Program) *Review {
 			r.PassedOver = append(r.PassedOver, rule.PassedOver{Rule: rl.ID, Because: j.PassedOver})
 		}
 	}
+	if faults := r.under(limits); len(faults) > 0 {
+		return nil, faults
+	}
 	r.Figures = figures(e)
-	r.Curves, r.Tables = curves(e), tables(e)
+	r.Curves, r.Tables = curves(e), append(localTable(r.Local), tables(e)...)
 	r.Diagram = diagram.Of(e, r.Findings)
 	r.Cautions = cautions(c)
 	r.Assumptions = assumptions(e, r.Findings)
-	r.Summary = summary(e)
+	r.Summary = append(summary(e), localLine(r.Local)...)
 	r.Verdict = rule.Worst(r.Findings)
 	r.Counts = counts(r.Findings)
-	return r
+	return r, nil
 }
 
 func counts(findings []rule.Finding) map[rule.Verdict]int {

@@ -12,8 +12,11 @@ import (
 // comparing is the flags of the command compare.
 type comparing struct {
 	world
-	json string
-	all  bool
+	json  string
+	local string
+	all   bool
+
+	under *localLimits // once read
 }
 
 func compareCommand(w world) *cobra.Command {
@@ -34,6 +37,7 @@ or written.`,
 		},
 	}
 	command.Flags().StringVar(&c.json, "json", "", "write the difference as JSON to `FILE`; - is standard output, without the text")
+	localFlag(command.Flags(), &c.local)
 	command.Flags().BoolVar(&c.all, "all", false, "show every figure that moved")
 	return command
 }
@@ -42,8 +46,8 @@ func (c *comparing) run(old, new string) error {
 	if old == "-" && new == "-" {
 		return exitf(unusable, "standard input can be one of the two only")
 	}
-	for _, given := range []string{old, new} {
-		if c.json != "" && c.json != "-" && given != "-" && same(c.json, given) {
+	for _, given := range []string{old, new, c.local} {
+		if c.json != "" && c.json != "-" && given != "-" && given != "" && same(c.json, given) {
 			return exitf(unusable, "%s is named twice; give every file a name of its own", c.json)
 		}
 	}
@@ -53,6 +57,9 @@ func (c *comparing) run(old, new string) error {
 	}
 	report := &difference.Report{Old: before.named(), New: after.named(), Difference: compare.Of(before.side(), after.side())}
 	report.Program.Name, report.Program.Version = "kilovet", version()
+	if c.under != nil {
+		report.Local = difference.File{Name: c.under.input.Name, SHA256: c.under.input.SHA256}
+	}
 	if err := c.write(report); err != nil {
 		return err
 	}
@@ -71,7 +78,7 @@ type reviewed struct {
 // reviewed reads and reviews both; the faults of both are listed before either ends
 // the run.
 func (c *comparing) reviewed(old, new string) (before, after reviewed, err error) {
-	r := &reviewing{world: c.world}
+	r := &reviewing{world: c.world, local: c.local}
 	if before.source, err = r.input([]string{old}); err != nil {
 		return before, after, err
 	}
@@ -83,6 +90,7 @@ func (c *comparing) reviewed(old, new string) (before, after reviewed, err error
 	if after.review = review; err == nil {
 		err = err2
 	}
+	c.under = r.under
 	return before, after, err
 }
 

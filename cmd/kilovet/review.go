@@ -1,14 +1,11 @@
 package main
 
 import (
-	"crypto/sha256"
-	"encoding/hex"
 	"errors"
 	"fmt"
 	"io"
 	"io/fs"
 	"os"
-	"path/filepath"
 	"slices"
 	"strings"
 
@@ -29,8 +26,11 @@ import (
 type reviewing struct {
 	world
 	pdf, json string
+	local     string
 	all       bool
 	require   []string
+
+	under *localLimits // once read
 }
 
 func reviewCommand(w world) *cobra.Command {
@@ -48,6 +48,7 @@ func reviewCommand(w world) *cobra.Command {
 	flags := command.Flags()
 	flags.StringVar(&r.pdf, "pdf", "", "write the sheets to `FILE`")
 	flags.StringVar(&r.json, "json", "", "write the results as JSON to `FILE`; - is standard output, without the text")
+	localFlag(flags, &r.local)
 	flags.BoolVar(&r.all, "all", false, "show every figure, finding and source")
 	flags.StringSliceVar(&r.require, "require", words(rule.Concerns), "let the exit status depend on these `CONCERNS` only")
 	return command
@@ -59,6 +60,7 @@ const aboutReview = `Review a description: what will happen, judged by named rul
   kilovet review --all chain.toml              every figure, finding and source
   kilovet review --pdf review.pdf chain.toml   sheets to read, file and sign
   kilovet review --json - chain.toml           results for other programs
+  kilovet review --local house.toml chain.toml under stricter limits of a local code
   kilovet review -                             a description on standard input
   kilovet review                               the built-in example
 
@@ -136,24 +138,33 @@ func readAll(name string, from io.Reader) (source, error) {
 	return source{name: name, data: data}, nil
 }
 
-// review reads the description and runs the rules; faults of the description are
-// all listed and end the run.
+// review reads the description and runs the rules; faults of the description, and of
+// the local limits, are all listed and end the run.
 func (r *reviewing) review(given source) (*rules.Review, error) {
+	_, err := r.limits()
 	c, faults := rules.Read(given.data)
 	if len(faults) > 0 {
-		for _, f := range faults {
-			fmt.Fprintln(r.err, digest.Clean(faultLine(given.name, f)))
-		}
-		return nil, exitf(unusable, "%s in %s; nothing was written", plural(len(faults), "fault"), given.name)
+		return nil, r.faulty(given.name, faults)
+	}
+	if err != nil {
+		return nil, err
 	}
 	return r.reviewOf(c, given)
 }
 
 // reviewOf runs the rules on a description that was read without faults.
 func (r *reviewing) reviewOf(c *chain.Chain, given source) (*rules.Review, error) {
-	sum := sha256.Sum256(given.data)
-	inputs := []rules.Input{{Role: "description", Name: filepath.Base(given.name), SHA256: hex.EncodeToString(sum[:])}}
-	return rules.Run(c, inputs, rules.Program{Name: "kilovet", Version: version()}), nil
+	inputs, program := []rules.Input{inputOf("description", given)}, rules.Program{Name: "kilovet", Version: version()}
+	limits, err := r.limits()
+	if err != nil || limits == nil {
+		return rules.Run(c, inputs, program), err
+	}
+	review, faults := rules.RunUnder(c, append(inputs, limits.input), program, limits.file)
+	if len(faults) > 0 {
+		return nil, r.faulty(limits.name, faults)
+	}
+	r.refusals(limits.name, review.Local)
+	return review, nil
 }
 
 // render makes every output before any of them is written; the note stands first.
@@ -212,6 +223,9 @@ func (r *reviewing) distinct(args []string) error {
 	paths := slices.DeleteFunc([]string{r.pdf, r.json}, func(p string) bool { return p == "" || p == "-" })
 	if len(args) == 1 && args[0] != "-" {
 		paths = append(paths, args[0])
+	}
+	if r.local != "" && r.local != "-" {
+		paths = append(paths, r.local)
 	}
 	for i, p := range paths {
 		for _, q := range paths[:i] {

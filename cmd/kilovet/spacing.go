@@ -30,6 +30,7 @@ func spacingCommand(w world) *cobra.Command {
 	flags := command.Flags()
 	g.gap = newGapFlags(flags)
 	flags.StringVar(&g.json, "json", "", "write the results as JSON to `FILE`; - is standard output, without the text")
+	localFlag(flags, &g.local)
 	flags.StringSliceVar(&g.require, "require", words(rule.Concerns), "let the exit status depend on these `CONCERNS` only")
 	return command
 }
@@ -55,10 +56,8 @@ func (g *gapping) run() error {
 	if err != nil {
 		return err
 	}
-	if g.json != "" && g.json != "-" {
-		if err := spares(g.json, results); err != nil {
-			return err
-		}
+	if err := g.writable(nil); err != nil {
+		return err
 	}
 	block, lines := g.gap.block()
 	review, err := g.judge(block, lines)

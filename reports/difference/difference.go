@@ -17,8 +17,12 @@ type Side struct{ Name, SHA256, Title string }
 type Report struct {
 	Program  struct{ Name, Version string }
 	Old, New Side
+	Local    File // the local limits that both were judged under; empty where none
 	compare.Difference
 }
+
+// File names a file that was read.
+type File struct{ Name, SHA256 string }
 
 // Words for a side that lacks something.
 const (

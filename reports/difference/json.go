@@ -23,6 +23,11 @@ type (
 		Inputs   []input   `json:"inputs"`
 		Figures  []number  `json:"figures"`
 		Findings []finding `json:"findings"`
+		Local    *file     `json:"local,omitempty"`
+	}
+	file struct {
+		Name   string `json:"name"`
+		SHA256 string `json:"sha256"`
 	}
 	program struct {
 		Name    string `json:"name"`
@@ -71,6 +76,9 @@ func JSON(r *Report) ([]byte, error) {
 		Inputs:   each(r.Inputs, func(i compare.Input) input { return input(i) }),
 		Figures:  each(r.Figures, func(f compare.Figure) number { return number(f) }),
 		Findings: each(r.Findings, findingOf),
+	}
+	if r.Local.Name != "" {
+		out.Local = &file{r.Local.Name, r.Local.SHA256}
 	}
 	var data bytes.Buffer
 	encoder := json.NewEncoder(&data)

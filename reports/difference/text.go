@@ -26,6 +26,9 @@ func Text(r *Report, o Options) []byte {
 	w := newWriter(o.Width)
 	w.hang("old", gutter, side(r.Old, r.Was))
 	w.hang("new", gutter, side(r.New, r.Is))
+	if r.Local.Name != "" {
+		w.hang("under", gutter, "the local limits of "+r.Local.Name)
+	}
 	w.line("")
 	w.hang("", 0, sentence(r))
 	w.section("Changed inputs", len(r.Inputs))

@@ -29,6 +29,7 @@ type (
 		Deference   string            `json:"deference"`
 		Curves      []curve           `json:"curves"`
 		Tables      []table           `json:"tables"`
+		Local       []localLimit      `json:"local"`
 	}
 	program struct {
 		Name    string `json:"name"`
@@ -114,6 +115,7 @@ func shape(r *rules.Review) review {
 		Summary:   each(r.Summary, func(l rules.Line) line { return line(l) }),
 		Deference: r.Deference,
 		Curves:    each(r.Curves, curveOf), Tables: each(r.Tables, tableOf),
+		Local: each(r.Local, localOf),
 	}
 }
 

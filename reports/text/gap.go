@@ -25,7 +25,7 @@ func Gap(r *rules.Review, block string, o Options) []byte {
 	gapFindings(w, r, "What is asked: tables of the standards, working stress", true)
 	gapFindings(w, r, "What it stands: physics", false)
 	for _, t := range r.Tables {
-		if t.Chapter == exhibit.Spacings {
+		if t.Chapter == exhibit.Spacings || t.ID == "local.limits" {
 			gapTable(w, t)
 		}
 	}

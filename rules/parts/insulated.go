@@ -89,5 +89,5 @@ func judgeFeedTest(e *evidence.Evidence, test document.Given[quantity.Voltage]) 
 	}
 	f.Under = most.Under.Text()
 	f.Because = "the feed stands up to " + quantity.Text(most.Value) + " and was tested with " + quantity.Text(test.V)
-	return f.Least(rule.Of(test.V), rule.Of(most.Value*limits.FeedTest), limits.FeedTestComfort/limits.FeedTest-1).WithoutRemedyIfMet()
+	return f.ShareOf(rule.Of(most.Value)).Least(rule.Of(test.V), rule.Of(most.Value*limits.FeedTest), limits.FeedTestComfort/limits.FeedTest-1).WithoutRemedyIfMet()
 }

@@ -35,5 +35,5 @@ var diodeRecovery = rule.Rule{
 func judgeRecovery(drive document.Given[quantity.Frequency], recovery document.Given[quantity.Time], f rule.Finding) rule.Finding {
 	half := quantity.Time(1 / (2 * float64(drive.V)))
 	f.Because = fmt.Sprintf("%s of a half period of %s", quantity.Text(recovery.V), quantity.Text(half))
-	return f.Most(rule.Of(recovery.V), rule.Of(half*limits.RecoveryShare), limits.RecoveryShare/limits.RecoveryComfort-1).WithoutRemedyIfMet()
+	return f.ShareOf(rule.Of(half)).Most(rule.Of(recovery.V), rule.Of(half*limits.RecoveryShare), limits.RecoveryShare/limits.RecoveryComfort-1).WithoutRemedyIfMet()
 }

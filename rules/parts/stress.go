@@ -42,6 +42,6 @@ func (r rating[Q]) judge(e *evidence.Evidence, g group, f rule.Finding) rule.Fin
 	if r.tolerance != nil && !r.tolerance.Set() {
 		f = f.Assume("the value of " + g.subject + " is exact: its tolerance is not given")
 	}
-	f = f.Most(rule.Of(most.Value), rule.Of(Q(float64(r.rated)*float64(r.derating.Fails))), r.derating.Margin())
+	f = f.ShareOf(rule.Of(r.rated)).Most(rule.Of(most.Value), rule.Of(Q(float64(r.rated)*float64(r.derating.Fails))), r.derating.Margin())
 	return f.WithoutRemedyIfMet()
 }

@@ -152,7 +152,7 @@ var rodVoltage = rule.Rule{
 		}
 		f.Under = most.Under.Text()
 		f.Because = fmt.Sprintf("%s reaches %s; through the rod it starts with %s", most.Name, quantity.Text(most.Value), peakCurrent(most.Value, r.Resistance.V))
-		return *only(f.Most(rule.Of(most.Value), rule.Of(r.RatedVoltage.V), limits.InsulationVoltage.Margin()).WithoutRemedyIfMet())
+		return *only(f.ShareOf(rule.Of(r.RatedVoltage.V)).Most(rule.Of(most.Value), rule.Of(r.RatedVoltage.V), limits.InsulationVoltage.Margin()).WithoutRemedyIfMet())
 	},
 }
 
@@ -190,6 +190,6 @@ var rodEnergy = rule.Rule{
 		}
 		f.Under = most.Under.Text()
 		f.Because = fmt.Sprintf("the chain stores up to %s", quantity.Text(most.Value))
-		return *only(f.Most(rule.Of(most.Value), rule.Of(r.RatedEnergy.V), limits.SinglePulse.Margin()).WithoutRemedyIfMet())
+		return *only(f.ShareOf(rule.Of(r.RatedEnergy.V)).Most(rule.Of(most.Value), rule.Of(r.RatedEnergy.V), limits.SinglePulse.Margin()).WithoutRemedyIfMet())
 	},
 }

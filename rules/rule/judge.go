@@ -22,6 +22,12 @@ func (f Finding) Most(provided, needed Amount, margin float64) Finding {
 	return f.judged(provided, needed, m, margin)
 }
 
+// ShareOf says what the limit is a share of.
+func (f Finding) ShareOf(whole Amount) Finding {
+	f.Whole = &whole
+	return f
+}
+
 // ratio is the margin; a demand of nothing is met without limit, said as a margin of a million.
 func ratio(a, b float64) float64 {
 	const boundless = 1e6
@@ -35,7 +41,7 @@ func (f Finding) judged(provided, needed Amount, m, margin float64) Finding {
 	if !finite(provided.Value) || !finite(needed.Value) || !finite(m) || provided.Value < 0 {
 		return f.Lacking(lack.Failed("%s and %s cannot be compared", provided.Text(), needed.Text()))
 	}
-	f.Provided, f.Needed, f.Margin = &provided, &needed, &m
+	f.Provided, f.Needed, f.Margin, f.Stated = &provided, &needed, &m, margin
 	switch {
 	case quantity.AtLeast(1+m, 1+margin):
 		f.Verdict = Meets

@@ -53,6 +53,8 @@ const (
 	Memory   Mark = "memory"
 	Practice Mark = "common practice, no source"
 	Derived  Mark = "derived"
+	Local    Mark = "local code"  // stricter, given in a file of local limits
+	Tested   Mark = "test record" // in place of practice or memory, given there
 )
 
 // Source is where a limit or law comes from.
@@ -89,6 +91,9 @@ type Finding struct {
 
 	Needed, Provided *Amount  // nil for a rule of presence, or where unassessed
 	Margin           *float64 // nil likewise
+	Stated           float64  // the margin below which it is marginal
+	// Whole is what the limit is a share of, a rating or an estimate; nil where it is none.
+	Whole *Amount
 
 	Under       string   // the condition judged: state, corner
 	Because     string   // one plain sentence

@@ -53,7 +53,7 @@ func judgeBreakdown(e *evidence.Evidence, s *chain.Spacing) rule.Finding {
 	f.Because = fmt.Sprintf("%s across a gap expected to break down at %s (%s)", quantity.Text(x.Voltages.Peak), quantity.Text(stands.Value), stands.Because)
 	f.Remedy = "widen the gap, round its electrodes, or lower the voltage"
 	limit := stands.Value * limits.BreakdownShare
-	return f.Most(rule.Of(x.Voltages.Peak), rule.Of(limit), limits.BreakdownShare/limits.BreakdownComfort-1).Assume(stands.Assumptions...).WithoutRemedyIfMet()
+	return f.ShareOf(rule.Of(stands.Value)).Most(rule.Of(x.Voltages.Peak), rule.Of(limit), limits.BreakdownShare/limits.BreakdownComfort-1).Assume(stands.Assumptions...).WithoutRemedyIfMet()
 }
 
 var coronaSource = rule.Source{Text: "highest voltage at most the onset estimate; corona makes ozone, noise and radio interference, it does not break a gap", Mark: rule.Practice}

@@ -88,7 +88,7 @@ func judgeMeter(e *evidence.Evidence, d *chain.Divider) rule.Finding {
 	}
 	f.Under = most.Under.Text()
 	f.Because = fmt.Sprintf("with the lower arm open the meter sees %s of the %s it is rated for", quantity.Text(most.Value), quantity.Text(rated.V))
-	return f.Most(rule.Of(most.Value), rule.Of(rated.V), limits.InsulationVoltage.Margin()).WithoutRemedyIfMet()
+	return f.ShareOf(rule.Of(rated.V)).Most(rule.Of(most.Value), rule.Of(rated.V), limits.InsulationVoltage.Margin()).WithoutRemedyIfMet()
 }
 
 var errorKnown = rule.Rule{

@@ -25,6 +25,8 @@ func figures(e *evidence.Evidence) []figure.Figure {
 		arcs(c, e.In(evidence.Lost))
 		c.state = evidence.Working
 		beam(c, e)
+		gunFigures(c, e)
+		paths(c, e)
 		c.state = ""
 		once(c, e)
 	}
@@ -135,7 +137,6 @@ func divider(c *collector, e *evidence.Evidence) {
 
 // once lists what does not depend on the state.
 func once(c *collector, e *evidence.Evidence) {
-	of(c, "gun.richardson_limit", "", "hv.gun", e.RichardsonLimit)
 	if band, err := e.DischargeBand(); err == nil {
 		add(c, "vacuum.band_from", "", "insulation.vacuum", band.From, nil)
 		add(c, "vacuum.band_to", "", "insulation.vacuum", band.To, nil)

@@ -41,6 +41,10 @@ type Gun struct {
 // IsFitted reports whether the gun is in place.
 func (g *Gun) IsFitted() bool { return g != nil && g.Fitted.Or(true) }
 
+// EarthedCathode reports whether the cathode is the end at earth, and the output feeds
+// the anode.
+func (g *Gun) EarthedCathode() bool { return g != nil && g.Earthed.V == "cathode" }
+
 // GunGeometry is the geometry of cathode, control electrode and anode.
 type GunGeometry struct {
 	document.Table

@@ -40,6 +40,9 @@ func (c *Chain) fixedNodes() []string {
 	if c.HasCathode() {
 		nodes = append(nodes, "cathode")
 	}
+	if c.Gun.EarthedCathode() {
+		nodes = append(nodes, "anode")
+	}
 	if c.Heater != nil {
 		nodes = append(nodes, "heater.a", "heater.b")
 	}

@@ -10,6 +10,9 @@ import (
 // gun adds bias, control electrode and emission. Without [bias] control electrode
 // and cathode are the output.
 func (m *maker) gun() {
+	if m.chain.Gun.EarthedCathode() {
+		m.link("anode lead", "output", "anode")
+	}
 	if m.chain.Gun == nil && m.chain.Bias == nil {
 		if m.chain.Heater != nil {
 			m.link("cathode lead", "output", "cathode")
@@ -18,22 +21,39 @@ func (m *maker) gun() {
 	}
 	m.bias()
 	if m.chain.Gun.IsFitted() {
-		// Electrons leave the cathode for the earthed anode: the current flows from anode to cathode.
-		m.add(Element{Name: "gun", Kind: Sink, Role: Load, Current: m.setting.Emission, Place: m.chain.Gun.Here()}, "ground", "cathode")
+		// Electrons leave the cathode for the anode: the current flows from anode to cathode.
+		m.add(Element{Name: "gun", Kind: Sink, Role: Load, Current: m.setting.Emission, Place: m.chain.Gun.Here()}, m.anode(), "cathode")
 	}
 }
 
+// anode is the node the electrons go to.
+func (m *maker) anode() string {
+	if m.chain.Gun.EarthedCathode() {
+		return "anode"
+	}
+	return "ground"
+}
+
+// feeding is the node that the fed electrode hangs on: the output, or ground where the
+// output feeds the anode.
+func (m *maker) feeding() string {
+	if m.chain.Gun.EarthedCathode() {
+		return "ground"
+	}
+	return "output"
+}
+
 func (m *maker) bias() {
-	b := m.chain.Bias
+	b, feeding := m.chain.Bias, m.feeding()
 	if b == nil {
-		m.link("cathode lead", "output", "cathode")
-		m.link("control lead", "output", "control")
+		m.link("cathode lead", feeding, "cathode")
+		m.link("control lead", feeding, "control")
 		return
 	}
 	if b.Fed.Or("control") == "control" {
-		m.link("control lead", "output", "control")
+		m.link("control lead", feeding, "control")
 	} else {
-		m.link("cathode lead", "output", "cathode")
+		m.link("cathode lead", feeding, "cathode")
 	}
 	if b.Kind.V == "fixed" {
 		m.add(Element{Name: "bias.source", Kind: Source, Role: Series, Permanent: true, Wave: Wave{Direct, b.Voltage.V, 0}, Place: b.Here()}, "cathode", "control")

@@ -112,6 +112,24 @@ func (g Geometry) Cutoff() (CutoffEstimate, error) {
 	return CutoffEstimate{ratio, ratio * (1 - band), ratio * (1 + band)}, nil
 }
 
+// CutoffWithin is Cutoff for a setback that may be off by a tolerance to either side:
+// the band takes in that of both ends. An end outside the table is a lack.
+func (g Geometry) CutoffWithin(tolerance quantity.Length) (CutoffEstimate, error) {
+	middle, err := g.Cutoff()
+	if err != nil || tolerance == 0 {
+		return middle, err
+	}
+	near, far := g, g
+	near.Setback -= tolerance
+	far.Setback += tolerance
+	most, err := near.Cutoff()
+	if err != nil {
+		return CutoffEstimate{}, err
+	}
+	least, err := far.Cutoff()
+	return CutoffEstimate{middle.Ratio, min(least.Low, middle.Low), max(most.High, middle.High)}, err
+}
+
 // tabulated says where the geometry leaves the table.
 func (g Geometry) tabulated() error {
 	hole := g.ApertureRadius

@@ -130,3 +130,20 @@ func TestCutoffOutsideTheTable(t *testing.T) {
 		lacking(t, what, err, lack.Outside)
 	}
 }
+
+// A setback that may be off widens the band by what it changes, to both sides.
+func TestCutoffWithinASetbackTolerance(t *testing.T) {
+	g := geometry(0.5, 0.4, 0, 10, gun.Tip{Radius: 60e-6})
+	exact, _ := g.CutoffWithin(0)
+	wide, err := g.CutoffWithin(0.05e-3)
+	if err != nil {
+		t.Fatal(err)
+	}
+	near, _ := geometry(0.5, 0.35, 0, 10, gun.Tip{Radius: 60e-6}).Cutoff()
+	far, _ := geometry(0.5, 0.45, 0, 10, gun.Tip{Radius: 60e-6}).Cutoff()
+	if wide.Ratio != exact.Ratio || wide.High != near.High || wide.Low != far.Low {
+		t.Errorf("%v, between %v and %v", wide, far, near)
+	}
+	_, err = g.CutoffWithin(0.3e-3)
+	lacking(t, "an end outside the table", err, lack.Outside)
+}

@@ -121,3 +121,15 @@ func (w Wire) TemperatureSwing(f quantity.Frequency) (quantity.TemperatureRise, 
 	omega := 2 * math.Pi * float64(f)
 	return quantity.TemperatureRise(w.radiated() / (2 * omega * w.section() * heatCapacity)), nil
 }
+
+// SwingAt is TemperatureSwing of a filament that takes a current: larger by the square of
+// it over the long wire's where it is the larger, since ends that are cooled ask for more.
+// A current of zero is the long wire's own.
+func (w Wire) SwingAt(f quantity.Frequency, current quantity.Current) (quantity.TemperatureRise, error) {
+	swing, err := w.TemperatureSwing(f)
+	if err != nil {
+		return 0, err
+	}
+	long, err := w.Current()
+	return swing * quantity.TemperatureRise(math.Pow(max(1, float64(current/long)), 2)), err
+}

@@ -123,3 +123,17 @@ func joined(errs ...error) error {
 	}
 	return lack.Key(keys...)
 }
+
+// Drift is by how much the held voltage moves, relatively, when the air at the divider
+// changes by so much: |temperature coefficient| of both arms, taken to oppose each other,
+// weighed as in Budget. A regulated output goes with it.
+func (d *Divider) Drift(change quantity.TemperatureRise) (quantity.Fraction, error) {
+	ratio, err := d.Ratio()
+	if err != nil {
+		return 0, err
+	}
+	upper, e1 := d.part.Upper.TemperatureCoefficient.Need()
+	lower, e2 := d.part.Lower.TemperatureCoefficient.Need()
+	sum := math.Abs(float64(upper)) + math.Abs(float64(lower))
+	return quantity.Fraction((1 - 1/ratio) * sum * float64(change)), joined(e1, e2)
+}

@@ -23,7 +23,7 @@ func (s Spot) RippleAllowed(allowanceFW50 quantity.Length) (quantity.Voltage, er
 	}
 	geometric := s.Terms.geometric()
 	room := (float64(allowanceFW50) - geometric) * (float64(allowanceFW50) + geometric)
-	disc := math.Sqrt(max(room, 0)) / float64(s.Optics.perEnergy(s.Electron))
+	disc := math.Sqrt(max(room, 0)) / float64(s.Optics.perEnergy(s.Particle))
 	scale, err := s.scaleTo(disc)
 	return s.Disturbance.PeakToPeak * quantity.Voltage(scale), err
 }

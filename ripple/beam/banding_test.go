@@ -26,7 +26,7 @@ func TestScanEdge(t *testing.T) {
 	near(t, "electrostatic edge", float64(Electrostatic.EdgeShift(at(t, 100), 500e-6, 1)), 2.313651e-9, 5e-6)
 	// Slopes of the laws themselves: x ~ 1/p and x ~ 1/(pv).
 	up, down := at(t, 100.01), at(t, 99.99)
-	p := func(e Electron) float64 { return e.Gamma() * e.Beta() }
+	p := func(e Particle) float64 { return e.Gamma() * e.Beta() }
 	near(t, "1/p", math.Log(p(up)/p(down))/math.Log(100.01/99.99), Magnetic.Sensitivity(at(t, 100)), 1e-6)
 	near(t, "1/pv", math.Log(p(up)*up.Beta()/p(down)/down.Beta())/math.Log(100.01/99.99), Electrostatic.Sensitivity(at(t, 100)), 1e-6)
 }

@@ -7,7 +7,7 @@ import (
 )
 
 // reviewed is the beam part of one review: source and three lines, one sampled.
-func reviewed(t interface{ Fatal(...any) }) (Electron, Optics, Distribution, Disturbance) {
+func reviewed(t interface{ Fatal(...any) }) (Particle, Optics, Distribution, Disturbance) {
 	samples := make([]quantity.Voltage, 512)
 	for i := range samples {
 		samples[i] = quantity.Voltage(float64(i%256)/512 - 0.1*float64(i/256))

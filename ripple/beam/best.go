@@ -27,7 +27,7 @@ func (s Spot) best(energies Distribution) (Best, error) {
 	o, disc := s.Optics, quantity.Length(energies.DiscFW50())
 	total := func(logAngle float64) float64 {
 		o.Angle = quantity.Angle(math.Exp(logAngle))
-		return float64(Terms{o.SourceImage, o.DiffractionFW50(s.Electron), o.SphericalFW50(), o.perEnergy(s.Electron) * disc}.BarthKruit())
+		return float64(Terms{o.SourceImage, o.DiffractionFW50(s.Particle), o.SphericalFW50(), o.perEnergy(s.Particle) * disc}.BarthKruit())
 	}
 	widest := math.Log(float64(widestAngle))
 	x := least(math.Log(1e-7), widest, func(x float64) float64 { return math.Log(total(x)) })

@@ -2,6 +2,9 @@ package beam
 
 import (
 	"math"
+	"math/cmplx"
+
+	"gonum.org/v1/gonum/dsp/fourier"
 
 	"kilovet/hv/lack"
 	"kilovet/hv/quantity"
@@ -28,27 +31,40 @@ type Harmonic struct {
 	Phase     quantity.Angle
 }
 
-// samplesPerPeriod of the highest harmonic keep a summed wave-form within 1e-5.
-const samplesPerPeriod = 600
+// sampled keeps a summed wave-form, drawn straight between its samples, within this part
+// of its largest harmonic: between N samples harmonic k sags by (π k/N)²/2 of itself.
+const sampled = 1e-5
 
 // HarmonicLine sums harmonics of one frequency, which keep step with each other, to
 // one wave-form; as lines of their own they would be taken to drift apart.
 func HarmonicLine(name string, f quantity.Frequency, terms []Harmonic) (Line, error) {
-	highest := 1
+	highest, most, bent := 1, 0.0, 0.0
 	for _, h := range terms {
 		if h.Order < 1 {
 			return Line{}, lack.Range("harmonics are numbered from 1, not %d", h.Order)
 		}
 		highest = max(highest, h.Order)
+		most = max(most, math.Abs(float64(h.Amplitude)))
+		bent += math.Abs(float64(h.Amplitude)) * float64(h.Order) * float64(h.Order)
 	}
-	samples := make([]quantity.Voltage, samplesPerPeriod*highest)
-	for i := range samples {
-		turn := 2 * math.Pi * float64(i) / float64(len(samples))
-		for _, h := range terms {
-			samples[i] += h.Amplitude * quantity.Voltage(math.Sin(float64(h.Order)*turn+float64(h.Phase)))
-		}
+	if most == 0 || math.IsNaN(bent) || math.IsInf(bent, 0) {
+		return SampledLine(name, f, []quantity.Voltage{0, quantity.Voltage(bent)})
 	}
-	return SampledLine(name, f, samples)
+	n := convenient(max(4*highest, int(math.Pi*math.Sqrt(bent/most/2/sampled))))
+	spectrum := make([]complex128, n/2+1)
+	for _, h := range terms {
+		// A sin(x + φ) = Re(−jA e^jφ e^jx); half of it on either side of the spectrum.
+		spectrum[h.Order] += cmplx.Rect(float64(h.Amplitude)/2, float64(h.Phase)-math.Pi/2)
+	}
+	return SampledLine(name, f, voltages(fourier.NewFFT(n).Sequence(nil, spectrum)))
+}
+
+func voltages(from []float64) []quantity.Voltage {
+	all := make([]quantity.Voltage, len(from))
+	for i, v := range from {
+		all[i] = quantity.Voltage(v)
+	}
+	return all
 }
 
 // PeakToPeak is twice the amplitude.
@@ -85,8 +101,31 @@ type Disturbance struct {
 	PeakToPeak quantity.Voltage
 	// RMS adds in squares.
 	RMS quantity.Voltage
-	// Energies is their distributions convolved.
-	Energies Distribution
+	// Lines is their distributions convolved, Energies those with noise, where there is any.
+	Lines, Energies Distribution
+}
+
+// OfCharge is what the disturbance does to particles of so many elementary charges: its
+// volts stay, its energies go with the charge.
+func (d Disturbance) OfCharge(charges float64) Disturbance {
+	d.Energies, d.Lines = d.Energies.Scaled(charges), d.Lines.Scaled(charges)
+	return d
+}
+
+// WithNoise adds random noise of an rms voltage, whose values are Gaussian; it has no peak
+// to peak and leaves that alone.
+func (d Disturbance) WithNoise(rms quantity.Voltage) (Disturbance, error) {
+	if rms == 0 {
+		return d, nil
+	}
+	unit, err := GaussianFWHM(1)
+	if err != nil {
+		return d, err
+	}
+	noise := unit.Scaled(float64(rms) / float64(unit.RMS()))
+	d.Energies = Convolve(d.Energies, noise)
+	d.RMS = quantity.Voltage(math.Hypot(float64(d.RMS), float64(rms)))
+	return d, nil
 }
 
 // Disturb convolves the lines. Those whose frequencies are in a ratio of small
@@ -102,6 +141,7 @@ func Disturb(lines ...Line) (Disturbance, error) {
 		d.PeakToPeak += l.PeakToPeak()
 	}
 	d.Energies = Convolve(parts...)
+	d.Lines = d.Energies
 	d.RMS = quantity.Voltage(d.Energies.RMS())
 	return d, nil
 }

@@ -41,18 +41,18 @@ const (
 )
 
 // ChromaticFW50 is the disc of a distribution: Cc a κ/E times its DiscFW50.
-func (o Optics) ChromaticFW50(e Electron, d Distribution) quantity.Length {
+func (o Optics) ChromaticFW50(e Particle, d Distribution) quantity.Length {
 	return o.perEnergy(e) * quantity.Length(d.DiscFW50())
 }
 
 // ChromaticEdge is the diameter of the whole disc for a full width of energy, Cc a κ
 // dE/E. It is an edge, not an FW50: it must not be added to those.
-func (o Optics) ChromaticEdge(e Electron, fullWidth quantity.ElectronEnergy) quantity.Length {
+func (o Optics) ChromaticEdge(e Particle, fullWidth quantity.ElectronEnergy) quantity.Length {
 	return o.perEnergy(e) * quantity.Length(fullWidth)
 }
 
 // perEnergy is Cc a κ/E in metres per electronvolt.
-func (o Optics) perEnergy(e Electron) quantity.Length {
+func (o Optics) perEnergy(e Particle) quantity.Length {
 	return o.Chromatic * quantity.Length(float64(o.Angle)*e.Kappa()/e.energy)
 }
 
@@ -62,7 +62,7 @@ func (o Optics) SphericalFW50() quantity.Length {
 }
 
 // DiffractionFW50 is 0.53483 λ/a.
-func (o Optics) DiffractionFW50(e Electron) quantity.Length {
+func (o Optics) DiffractionFW50(e Particle) quantity.Length {
 	return e.Wavelength() * quantity.Length(diffractionFW50/float64(o.Angle))
 }
 

@@ -9,7 +9,7 @@ import (
 // Spot is the beam at the specimen: widths of its energy and blur, source and
 // disturbance apart and together.
 type Spot struct {
-	Electron    Electron
+	Particle    Particle
 	Optics      Optics
 	Source      Distribution
 	Disturbance Disturbance
@@ -33,11 +33,11 @@ type Spot struct {
 // The disc of source and disturbance together is never more than both added in
 // squares, but it can be up to 3 % less than the disturbance's alone: a source under
 // a large sine blunts the ends at which the sine dwells.
-func Compute(e Electron, o Optics, source Distribution, d Disturbance) (Spot, error) {
+func Compute(e Particle, o Optics, source Distribution, d Disturbance) (Spot, error) {
 	if err := o.check(); err != nil {
 		return Spot{}, err
 	}
-	s := Spot{Electron: e, Optics: o, Source: source, Disturbance: d, Energies: Convolve(source, d.Energies)}
+	s := Spot{Particle: e, Optics: o, Source: source, Disturbance: d, Energies: Convolve(source, d.Energies)}
 	s.WidthSourceFW50, s.WidthRippleFW50, s.WidthTotalFW50 = source.FW50(), d.Energies.FW50(), s.Energies.FW50()
 	s.BlurChromaticFW50, s.BlurRippleFW50 = o.ChromaticFW50(e, source), o.ChromaticFW50(e, d.Energies)
 	s.Terms = Terms{o.SourceImage, o.DiffractionFW50(e), o.SphericalFW50(), o.ChromaticFW50(e, s.Energies)}

@@ -6,6 +6,7 @@ import (
 	"kilovet/hv/chain"
 	"kilovet/hv/circuit"
 	"kilovet/hv/quantity"
+	"kilovet/hv/trace"
 )
 
 // Evidence is what is computed for a chain under one condition. Values for other
@@ -14,6 +15,7 @@ type Evidence struct {
 	chain     *chain.Chain
 	condition Condition
 	memory    *memory
+	trace     *trace.Trace // of the measured ripple; nil where none was read
 }
 
 // New starts the evidence for a chain in working state, with an empty memory.
@@ -23,7 +25,9 @@ func New(c *chain.Chain) *Evidence {
 
 // Under is the evidence for the same chain under another condition.
 func (e *Evidence) Under(c Condition) *Evidence {
-	return &Evidence{chain: e.chain, condition: c, memory: e.memory}
+	with := *e
+	with.condition = c
+	return &with
 }
 
 // In is the evidence in another state, otherwise under the same condition.

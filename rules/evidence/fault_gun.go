@@ -3,7 +3,6 @@ package evidence
 import (
 	"kilovet/hv/circuit"
 	"kilovet/hv/gun"
-	"kilovet/hv/lack"
 	"kilovet/hv/quantity"
 )
 
@@ -31,7 +30,7 @@ func (e *Evidence) gunInFault() (gunPoint, error) {
 		if is.Element("gun") == nil || biasIs(is) == biasIs(was) {
 			return gunPoint{emission: emission}, nil
 		}
-		law, err := e.lawInFault(emission)
+		law, err := e.lawInFault()
 		if err != nil {
 			return gunPoint{}, err
 		}
@@ -61,19 +60,12 @@ func biasIs(c *circuit.Circuit) biasSetter {
 }
 
 // lawInFault is the emission law through the healthy point, or the stated one.
-func (e *Evidence) lawInFault(emission quantity.Current) (gun.Law, error) {
-	g := e.chain.Gun
-	if !g.Emission.Set() {
+func (e *Evidence) lawInFault() (gun.Law, error) {
+	if !e.chain.Gun.Emission.Set() {
 		return e.statedLaw()
 	}
-	if !g.Cutoff.Set() {
-		return gun.Law{}, lack.Key(g.Cutoff.Key)
-	}
-	bias, err := e.Healthy().BiasVoltage()
-	if err != nil {
-		return gun.Law{}, err
-	}
-	return gun.Through(g.Cutoff.V, g.Exponent.Or(usualExponent), bias, emission)
+	law, err := e.readLaw()
+	return e.limited(law, err)
 }
 
 // settles is where a law comes to rest with what is left of the bias. With nothing left

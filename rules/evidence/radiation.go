@@ -16,7 +16,7 @@ const surveyDistance quantity.Length = 0.1
 // elsewhere in the vessel to the output, over states and corners.
 func (e *Evidence) Accelerating() (Extreme[quantity.Voltage], error) {
 	node := "output"
-	if e.chain.HasCathode() {
+	if e.chain.HasCathode() && !e.chain.Gun.EarthedCathode() {
 		node = "cathode"
 	}
 	return Largest(e, Ratings(), []string{node}, func(e *Evidence, n string) (quantity.Voltage, error) { return e.Between(n, "ground") })

@@ -7,7 +7,6 @@ import (
 
 	"kilovet/hv/circuit"
 	"kilovet/hv/document"
-	"kilovet/hv/gun"
 	"kilovet/hv/lack"
 	"kilovet/hv/quantity"
 	"kilovet/ripple/phasor"
@@ -17,7 +16,8 @@ import (
 // cathode; behind a filter they fall at least as the square of their order.
 const harmonics = 48
 
-// Line is one frequency at the cathode or across the bias, as complex amplitudes.
+// Line is one frequency between the cathode and what its electrons go to, and across the
+// bias, as complex amplitudes.
 type Line struct {
 	Frequency     quantity.Frequency
 	Cathode, Bias complex128
@@ -33,24 +33,36 @@ func (l Line) AcrossBias() quantity.Voltage { return quantity.Voltage(cmplx.Abs(
 // multiplier through filter, cable, bias and floating supply, and what strays pick up.
 func (e *Evidence) DriveLines() ([]Line, error) {
 	return remember(e, "drive lines", func() ([]Line, error) {
-		s, err := e.solution()
-		if err != nil {
-			return nil, err
-		}
 		var lines []Line
 		for k := 1; k <= harmonics; k++ {
-			x, err := e.driven(s, k)
+			l, err := e.driveLine(k, nil)
 			if err != nil {
 				return nil, err
 			}
-			l, err := e.line(e.chain.Drive.Frequency.V*quantity.Frequency(k), x)
-			if err != nil {
-				return nil, err
-			}
-			lines = append(lines, l.scaled(e.taper(k)))
+			lines = append(lines, l)
 		}
 		return lines, nil
 	})
+}
+
+// driveLine is harmonic k of the drive at the cathode, as far as the tops that are kept
+// bring it there; nil keeps all.
+func (e *Evidence) driveLine(k int, kept func(node string) bool) (Line, error) {
+	s, err := e.solution()
+	if err != nil {
+		return Line{}, err
+	}
+	x, err := e.driven(s, k)
+	if err != nil {
+		return Line{}, err
+	}
+	for i := range x.Nodes {
+		if kept != nil && !kept(x.Nodes[i].Node) {
+			x.Nodes[i].Voltage = 0
+		}
+	}
+	l, err := e.line(e.chain.Drive.Frequency.V*quantity.Frequency(k), x)
+	return l.scaled(e.taper(k)), err
 }
 
 // taper weighs harmonic k of a square drive, whose steps a cut series would overshoot by
@@ -127,7 +139,8 @@ func (e *Evidence) line(f quantity.Frequency, x phasor.Excitation) (Line, error)
 	if err != nil {
 		return Line{}, err
 	}
-	cathode, err := r.At("cathode")
+	from, to := e.BeamEnds()
+	cathode, err := r.Between(from, to)
 	if err != nil {
 		return Line{}, err
 	}
@@ -234,25 +247,12 @@ func (e *Evidence) CathodeHum() (quantity.Voltage, error) {
 	return quantity.Voltage(2*cmplx.Abs(l.Cathode)) + 2*tip, err
 }
 
-// TipSwing is the amplitude by which an AC heater swings the tip of the filament against
-// the cathode node; none for a DC heater.
-func (e *Evidence) TipSwing() (quantity.Voltage, error) {
-	h := e.chain.Heater
-	if h == nil || h.Supply.Set() && h.Supply.V == "dc" {
-		return 0, nil
-	}
-	if err := document.Need(h.Supply, h.Voltage); err != nil {
-		return 0, err
-	}
-	amplitude := h.Voltage.V * math.Sqrt2
-	if h.CentreResistors == nil {
-		return gun.TipSwingReturn(amplitude), nil
-	}
-	return gun.TipSwing(amplitude, h.CentreResistors.Value.V[0], h.CentreResistors.Value.V[1])
-}
-
-// CathodeDisturbance is the linear sum of ripple and hum.
+// CathodeDisturbance is the linear sum of ripple and hum, or what was measured in their
+// place.
 func (e *Evidence) CathodeDisturbance() (quantity.Voltage, error) {
+	if m, err := e.Measured(); err != nil || m != nil {
+		return m.PeakToPeak(), err
+	}
 	ripple, err := e.CathodeRipple()
 	if err != nil {
 		return 0, err

@@ -30,7 +30,7 @@ func lacking(t reporter, what string, err error, kind lack.Kind) {
 }
 
 // at is an electron accelerated by kilovolts.
-func at(t interface{ Fatal(...any) }, kilovolts float64) Electron {
+func at(t interface{ Fatal(...any) }, kilovolts float64) Particle {
 	e, err := Accelerated(quantity.Voltage(kilovolts * 1e3))
 	if err != nil {
 		t.Fatal(err)

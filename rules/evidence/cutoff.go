@@ -1,0 +1,103 @@
+package evidence
+
+import (
+	"kilovet/hv/document"
+	"kilovet/hv/gun"
+	"kilovet/hv/lack"
+	"kilovet/hv/quantity"
+)
+
+// Cutoff is the bias at which emission stops at full working voltage: as stated, else
+// the estimate from the gun's geometry.
+func (e *Evidence) Cutoff() (quantity.Voltage, error) {
+	g := e.chain.Gun
+	if g == nil {
+		return 0, lack.Key("gun")
+	}
+	if g.Cutoff.Set() || g.Geometry == nil {
+		return g.Cutoff.Need()
+	}
+	estimate, err := e.CutoffEstimate()
+	return estimate.Voltage, err
+}
+
+// CutoffByGeometry reports whether the cutoff in use is an estimate.
+func (e *Evidence) CutoffByGeometry() bool {
+	g := e.chain.Gun
+	return g != nil && g.Geometry != nil && !g.Cutoff.Set() && !e.DiodeGun()
+}
+
+// EstimatedCutoff is a cutoff from the geometry, with its band, at an anode voltage.
+type EstimatedCutoff struct {
+	Ratio              gun.CutoffEstimate
+	Anode              quantity.Voltage
+	Voltage, Low, High quantity.Voltage
+}
+
+// CutoffEstimate is the cutoff from the tabulated geometries at the working voltage,
+// with the band of the table and of the setback's tolerance.
+func (e *Evidence) CutoffEstimate() (EstimatedCutoff, error) {
+	return remember(e, "cutoff estimate", func() (EstimatedCutoff, error) {
+		shape, tolerance, err := e.gunShape()
+		if err != nil {
+			return EstimatedCutoff{}, err
+		}
+		ratio, err := shape.CutoffWithin(tolerance)
+		if err != nil {
+			return EstimatedCutoff{}, err
+		}
+		anode, err := e.anodeVoltage()
+		return EstimatedCutoff{ratio, anode, ratio.Voltage(anode), anode * quantity.Voltage(ratio.Low), anode * quantity.Voltage(ratio.High)}, err
+	})
+}
+
+// CutoffRatio is the cutoff over the working voltage; the one goes with the other.
+func (e *Evidence) CutoffRatio() (float64, error) {
+	cutoff, err := e.Cutoff()
+	if err != nil {
+		return 0, err
+	}
+	v, err := e.Accelerated()
+	if err != nil || v == 0 {
+		return 0, joined(err, lack.Failed("the gun has no working voltage"))
+	}
+	return float64(cutoff / magnitude(v)), nil
+}
+
+// gunShape is the geometry of the gun and the tolerance of its setback.
+func (e *Evidence) gunShape() (gun.Geometry, quantity.Length, error) {
+	if e.chain.Gun == nil || e.chain.Gun.Geometry == nil {
+		return gun.Geometry{}, 0, lack.Key("gun.geometry")
+	}
+	g := e.chain.Gun.Geometry
+	err := document.Need(g.ApertureRadius, g.PlateThickness, g.Setback, g.AnodeDistance)
+	flat := g.Cathode.V == "flat"
+	if !flat {
+		err = joined(err, document.Need(g.TipRadius))
+	}
+	return gun.Geometry{ApertureRadius: g.ApertureRadius.V, PlateThickness: g.PlateThickness.V, Setback: g.Setback.V,
+		AnodeDistance: g.AnodeDistance.V, AnodeApertureRadius: g.AnodeApertureRadius.V,
+		Tip: gun.Tip{Flat: flat, Radius: g.TipRadius.V}}, g.SetbackTolerance.V, err
+}
+
+// anodeVoltage is the working voltage that the cutoff goes with: the set one, else that
+// of no load. What the bias takes of it is within the band.
+func (e *Evidence) anodeVoltage() (quantity.Voltage, error) {
+	if r := e.chain.Regulation; r != nil {
+		return r.Set.V, nil
+	}
+	return e.NoLoad()
+}
+
+// joined is one lack for what two reasons miss; the first reason that is no missing key
+// governs.
+func joined(a, b error) error {
+	la, lb := lack.Of(a), lack.Of(b)
+	switch {
+	case a == nil:
+		return b
+	case b == nil || la == nil || lb == nil || la.Kind != lack.Missing || lb.Kind != lack.Missing:
+		return a
+	}
+	return lack.Key(append(append([]string{}, la.Keys...), lb.Keys...)...)
+}

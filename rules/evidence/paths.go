@@ -1,0 +1,249 @@
+package evidence
+
+import (
+	"fmt"
+	"math/cmplx"
+
+	"kilovet/hv/lack"
+	"kilovet/hv/quantity"
+)
+
+// Path is one way by which ripple, hum, drift or noise reaches the beam.
+type Path struct {
+	Name string // the subject of its figures: "drive.1/filter"
+	What string // in words
+	// Frequency is zero for noise, which has many, and for drift, which is slower than an
+	// exposure.
+	Frequency quantity.Frequency
+	// Voltage is at the cathode, Bias across the bias, Emission the relative swing of the
+	// emission: peak to peak, of noise rms.
+	Voltage, Bias quantity.Voltage
+	Emission      quantity.Fraction
+	Noise, Drift  bool
+	// Unknown is why there are no numbers; nil where there are.
+	Unknown error
+}
+
+// Paths lists every way to cathode and bias, in the order of the chain.
+func (e *Evidence) Paths() []Path {
+	all, _ := remember(e, "paths", func() ([]Path, error) {
+		var all []Path
+		for _, part := range []func() []Path{e.drivePaths, e.humPaths, e.heaterPaths, e.driftPaths, e.noisePaths, e.measuredPaths} {
+			all = append(all, part()...)
+		}
+		for i := range all {
+			all[i].Emission = max(all[i].Emission, e.emissionSwing(all[i].Bias))
+		}
+		return all, nil
+	})
+	return all
+}
+
+// emissionSwing is what a voltage across the bias makes of the emission; none where the
+// law is not known.
+func (e *Evidence) emissionSwing(bias quantity.Voltage) quantity.Fraction {
+	if bias == 0 || e.DiodeGun() {
+		return 0
+	}
+	p, err := e.Gun()
+	if err != nil {
+		return 0
+	}
+	swing, err := p.Swing(bias)
+	if err != nil {
+		return 0
+	}
+	return swing
+}
+
+// Harmonics of the drive are listed up to shownOrders as far as they reach shownShare of
+// the largest.
+const (
+	shownOrders = 6
+	shownShare  = 0.01
+)
+
+// drivePaths are the drive's harmonics, through the filters and as pickup past them.
+func (e *Evidence) drivePaths() []Path {
+	if !e.HasSupply() {
+		return nil
+	}
+	lines, err := e.DriveLines()
+	if err != nil {
+		return []Path{{Name: "drive", What: "ripple of the multiplier", Unknown: err}}
+	}
+	most := 0.0
+	for _, l := range lines[:shownOrders] {
+		most = max(most, cmplx.Abs(l.Cathode))
+	}
+	var all []Path
+	for k, l := range lines[:shownOrders] {
+		through, err := e.driveLine(k+1, func(node string) bool { return node == "multiplier" })
+		if err != nil {
+			return append(all, Path{Name: "drive", What: "ripple of the multiplier", Unknown: err})
+		}
+		past := Line{l.Frequency, l.Cathode - through.Cathode, l.Bias - through.Bias}
+		if max(cmplx.Abs(through.Cathode), cmplx.Abs(past.Cathode)) < shownShare*most {
+			continue
+		}
+		order := fmt.Sprint(k + 1)
+		all = append(all,
+			path("drive."+order+"/filter", ordinal(k+1)+" harmonic through filters and cable", through),
+			path("drive."+order+"/pickup", ordinal(k+1)+" harmonic as pickup past the filter", past))
+	}
+	return all
+}
+
+func ordinal(n int) string {
+	return []string{"", "first", "second", "third", "fourth", "fifth", "sixth"}[n]
+}
+
+// path is a line as peak to peak.
+func path(name, what string, l Line) Path {
+	return Path{Name: name, What: what, Frequency: l.Frequency,
+		Voltage: quantity.Voltage(2 * cmplx.Abs(l.Cathode)), Bias: quantity.Voltage(2 * cmplx.Abs(l.Bias))}
+}
+
+// humPaths is the mains' common mode through the heater feed.
+func (e *Evidence) humPaths() []Path {
+	h := e.chain.Heater
+	if h == nil || h.Feed != nil && h.Feed.Kind.V == "battery" {
+		return nil
+	}
+	what := "common mode of the mains through the heater feed"
+	if h.Feed != nil && h.Feed.Screen.V {
+		what += ", screened"
+	}
+	l, err := e.Hum()
+	p := path("mains/feed", what, l)
+	p.Unknown = err
+	return []Path{p}
+}
+
+// heaterPaths are what an AC heater, or the ripple of a DC one, does to tip and emission.
+func (e *Evidence) heaterPaths() []Path {
+	h := e.chain.Heater
+	if h == nil {
+		return nil
+	}
+	if !e.alternatingHeater() {
+		v, f, err := e.TipRipple()
+		if v == 0 && err == nil {
+			return nil
+		}
+		return []Path{{Name: "heater/ripple", What: "ripple of the heater's DC at the tip", Frequency: f, Voltage: 2 * v, Bias: 2 * v, Unknown: err}}
+	}
+	tip := Path{Name: "heater/tip", What: "AC heater: swing of the tip by mismatch of its centre resistors"}
+	if h.CentreResistors == nil {
+		tip.What = "AC heater: swing of the tip, one leg being the return"
+	}
+	v, err := e.TipSwing()
+	if err == nil {
+		tip.Frequency, err = e.heaterFrequency()
+	}
+	tip.Voltage, tip.Bias, tip.Unknown = 2*v, 2*v, err
+	warm := Path{Name: "heater/temperature", What: "AC heater: swing of its temperature, hence of the emission"}
+	w, err := e.TemperatureSwing()
+	warm.Frequency, warm.Bias, warm.Unknown = w.Frequency, w.Bias, err
+	warm.Emission = w.Emission
+	if e.biasMovesCathode() {
+		warm.Voltage = w.Bias
+	}
+	return []Path{tip, warm}
+}
+
+// driftPaths are what moves slower than an exposure.
+func (e *Evidence) driftPaths() []Path {
+	if e.chain.Beam == nil && !e.chain.HasCathode() {
+		return nil
+	}
+	drifts, err := e.Drifts()
+	if err != nil {
+		return []Path{{Name: "drift", What: "divider and regulation over temperature and exposure", Drift: true, Unknown: err}}
+	}
+	all := make([]Path, len(drifts))
+	for i, d := range drifts {
+		all[i] = Path{Name: d.Name, What: driftWords[d.Name], Voltage: d.Voltage, Drift: true}
+	}
+	return all
+}
+
+var driftWords = map[string]string{
+	"divider/temperature":       "divider: its coefficients over the change of air within an exposure",
+	"reference/temperature":     "reference and amplifier over the change of air within an exposure",
+	"regulation/stability":      "reference and amplifier over an exposure at even temperature",
+	"bias resistor/temperature": "bias resistor over the change of air within an exposure",
+}
+
+// noisePaths are resistor and emission noise across the bias.
+func (e *Evidence) noisePaths() []Path {
+	if b := e.chain.Bias; b == nil || b.Kind.V != "self" || !e.chain.Gun.IsFitted() {
+		return nil
+	}
+	resistor, emission, err := e.BiasNoise()
+	noise := func(name, what string, rms quantity.Voltage) Path {
+		p := Path{Name: name, What: what, Bias: rms, Noise: true, Unknown: err}
+		if e.biasMovesCathode() {
+			p.Voltage = rms
+		}
+		return p
+	}
+	return []Path{noise("bias resistor/noise", "thermal noise of the bias resistor", resistor),
+		noise("emission/noise", "shot noise of the emission, at most", emission)}
+}
+
+// measuredPaths is the measured record, which stands in place of ripple and hum.
+func (e *Evidence) measuredPaths() []Path {
+	m, err := e.Measured()
+	if m == nil && err == nil {
+		return nil
+	}
+	p := Path{Name: "measured", What: "measured at the cathode; in place of what is computed", Unknown: err}
+	if m != nil {
+		lines, _, err := m.Record.Lines("measured", m.Record.Duration())
+		p.Voltage, p.Unknown = m.PeakToPeak(), err
+		if err == nil {
+			p.Frequency = lines[0].Frequency
+		}
+	}
+	return []Path{p}
+}
+
+// Within says whether a path blurs, bands or drifts over exposure and dwell.
+func (e *Evidence) Within(p Path) string {
+	b := e.chain.Beam
+	switch {
+	case p.Noise:
+		return "blurs"
+	case p.Drift:
+		return "drifts within an exposure"
+	case b == nil || !b.Exposure.Set() && !b.Dwell.Set():
+		return ""
+	case !quantity.AtLeast(float64(p.Frequency)*float64(e.averaging()), 1):
+		return "bands: slower than " + quantity.Text(e.averaging())
+	case b.Dwell.Set() && !quantity.AtLeast(float64(p.Frequency)*float64(b.Dwell.V), 1):
+		return "blurs within the exposure, bands within the dwell"
+	}
+	return "blurs"
+}
+
+// Locked reports whether a path keeps step with the mains.
+func (e *Evidence) Locked(p Path) bool {
+	s := e.chain.Site
+	if s == nil || !s.MainsFrequency.Set() || p.Frequency == 0 {
+		return false
+	}
+	turns := float64(p.Frequency / s.MainsFrequency.V)
+	return quantity.Equal(turns, 1) || quantity.Equal(turns, 2)
+}
+
+// NoPaths is why nothing is said of paths to the beam; nil where they are listed.
+func (e *Evidence) NoPaths() error {
+	if !e.HasSupply() {
+		return lack.Key("drive", "multiplier")
+	}
+	if e.chain.Beam == nil && !e.chain.HasCathode() {
+		return lack.Failed("neither a beam nor a cathode is described")
+	}
+	return nil
+}

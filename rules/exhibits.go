@@ -12,6 +12,9 @@ func curves(e *evidence.Evidence) []exhibit.Curve {
 		waveforms,
 		nodeWaveforms,
 		diodeWaveforms,
+		emissionCurve,
+		cathodeSpectrum,
+		spotCurves,
 	)
 }
 
@@ -24,6 +27,11 @@ func tables(e *evidence.Evidence) []exhibit.Table {
 		diodeTable,
 		ripples,
 		losses,
+		operatingPoint,
+		answering,
+		pathsTable,
+		spotTable,
+		leftOut,
 		distances,
 		arcTables,
 	)

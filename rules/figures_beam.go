@@ -62,8 +62,8 @@ func causes(s spot.Spot) []cause {
 		{"source image", s.Terms.SourceImage, share.SourceImage},
 		{"diffraction", s.Terms.Diffraction, share.Diffraction},
 		{"spherical aberration", s.Terms.Spherical, share.Spherical},
-		{"chromatic aberration", s.Terms.Chromatic, share.Chromatic},
-		{"ripple", s.BlurRippleFW50, share.Ripple},
+		{"chromatic aberration, ripple included", s.Terms.Chromatic, share.Chromatic},
+		{"ripple alone", s.BlurRippleFW50, share.Ripple},
 	}
 }
 

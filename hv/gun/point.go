@@ -111,3 +111,12 @@ func (p Point) Transconductance() Transconductance {
 // LoopGain is L = gm R = n Vb/(Vc − Vb) of the self-biased gun: what disturbs the
 // emission is divided by 1 + L. Zero at fixed bias.
 func (p Point) LoopGain() float64 { return float64(p.Transconductance()) * float64(p.resistor) }
+
+// LoadLine is the current that a bias drives through the bias resistor, Vb/R; a lack
+// without one.
+func (p Point) LoadLine(bias quantity.Voltage) (quantity.Current, error) {
+	if p.resistor == 0 {
+		return 0, lack.Failed("a fixed bias has no load line")
+	}
+	return quantity.Current(float64(bias) / float64(p.resistor)), nil
+}

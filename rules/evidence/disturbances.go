@@ -1,8 +1,10 @@
 package evidence
 
 import (
+	"cmp"
 	"math"
 	"math/cmplx"
+	"slices"
 
 	"kilovet/hv/quantity"
 	"kilovet/ripple/beam"
@@ -83,6 +85,26 @@ func (e *Evidence) lockedLines() ([]beam.Line, error) {
 		add("heater's temperature", warm.Frequency, warm.Bias/2)
 	}
 	return lines, nil
+}
+
+// Tones are hum and harmonics of the drive at the cathode as they are computed, the lowest
+// first; nothing where they are not known.
+func (e *Evidence) Tones() []beam.Tone {
+	var all []beam.Tone
+	if slow, err := e.lockedLines(); err == nil {
+		for _, l := range slow {
+			all = append(all, beam.Tone{Frequency: l.Frequency, Amplitude: l.Amplitude})
+		}
+	}
+	drive, err := e.DriveLines()
+	if err != nil {
+		return all
+	}
+	for _, l := range drive {
+		all = append(all, beam.Tone{Frequency: l.Frequency, Amplitude: quantity.Voltage(cmplx.Abs(l.Cathode))})
+	}
+	slices.SortStableFunc(all, func(a, b beam.Tone) int { return cmp.Compare(a.Frequency, b.Frequency) })
+	return all
 }
 
 // biasMovesCathode reports whether a change of the bias moves the cathode rather than the

@@ -53,6 +53,7 @@ type Chain struct {
 	Fields     []Field     `key:"field" means:"axisymmetric arrangement of electrodes and dielectrics"`
 
 	Feedthroughs []Feedthrough `key:"feedthrough" means:"conductor through the hole of a plate"`
+	Instruments  []Instrument  `key:"instrument" means:"what is read at the first switching on, beside the meter of the divider"`
 }
 
 // Site is where the chain stands.

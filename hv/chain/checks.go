@@ -22,6 +22,7 @@ var checks = []Check{
 	{"name", "names tell things apart", checkNames},
 	{"node", "every named node exists", checkNodes},
 	{"part", "a loose part has the values of its kind", checkParts},
+	{"instrument", "an instrument reads a node, or the return", checkInstruments},
 	{"target", "a shield stands before a target that is described", checkTargets},
 	{"spacing", "a spacing lies between two nodes or stands a stated voltage", checkSpacings},
 	{"feedthrough", "the parts of a feedthrough go into each other, and its pin is at a node or a stated voltage", checkFeedthroughs},
@@ -54,7 +55,7 @@ func checkMultiplier(s *survey) {
 
 // hangingOn lists the tables that make no sense without a multiplier.
 func (s *survey) hangingOn() []document.Place {
-	return slices.Concat(each(s.Filters), each(s.Loads), each(s.Bleeders), one(s.Regulation),
+	return slices.Concat(each(s.Filters), each(s.Loads), each(s.Bleeders), each(s.Instruments), one(s.Regulation),
 		one(s.Cable), one(s.Divider), one(s.Bias), one(s.Gun), one(s.Heater))
 }
 

@@ -36,6 +36,10 @@ func (s *survey) chainNodes() {
 	if s.Divider != nil {
 		s.sensedNode(s.Divider.Senses)
 	}
+	for i := range s.Instruments {
+		s.node(s.Instruments[i].At)
+		s.node(s.Instruments[i].To)
+	}
 	for i := range s.Spacings {
 		sp := &s.Spacings[i]
 		s.node(sp.From)
@@ -144,6 +148,7 @@ func checkNames(s *survey) {
 	s.distinct("feedthrough", names(s.Feedthroughs, func(f *Feedthrough) document.Given[string] { return f.Name }))
 	s.distinct("target", names(s.Targets, func(t *Target) document.Given[string] { return t.Name }))
 	s.distinct("shield", names(s.Shields, func(sh *Shield) document.Given[string] { return sh.Name }))
+	s.distinct("instrument", names(s.Instruments, func(i *Instrument) document.Given[string] { return i.Name }))
 	s.distinct("field", names(s.Fields, func(f *Field) document.Given[string] { return f.Name }))
 	for i := range s.Fields {
 		s.distinct("probe", names(s.Fields[i].Probes, func(p *Probe) document.Given[string] { return p.Name }))

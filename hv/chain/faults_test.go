@@ -219,6 +219,22 @@ altitude = "1 m"
 [heater]
 supply = "ac"          # FAULT 10 heater: heater.supply: an AC heater of unknown frequency; give frequency here or mains_frequency in [site]
 `,
+	"instruments": whole + `
+[[instrument]]         # FAULT 1 instrument: instrument: an instrument that reads no node; give at
+name = "a"
+resistance = "1 Gohm"
+[[instrument]]         # FAULT 1 instrument: instrument: a voltmeter without its resistance; give resistance
+name = "b"
+at = "outputt"         # FAULT 6 node: instrument.at: "outputt" is no node of this chain; was "output" meant?
+[[instrument]]
+name = "c"
+at = "ground"          # FAULT 6 instrument: instrument.at: both ends on ground; name the node
+resistance = "1 Gohm"
+[[instrument]]
+name = "c"             # FAULT 8 name: instrument.name: a second instrument named "c"; choose another name
+reads = "return current"
+at = "output"          # FAULT 6 instrument: instrument.at: the current in the return is read at the foot of the multiplier; leave it out
+`,
 	"names": whole + `
 [[load]]
 name = "a"

@@ -34,6 +34,7 @@ func tables(e *evidence.Evidence) []exhibit.Table {
 		leftOut,
 		distances,
 		arcTables,
+		powerUp,
 	)
 }
 

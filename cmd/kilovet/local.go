@@ -1,8 +1,6 @@
 package main
 
 import (
-	"crypto/sha256"
-	"encoding/hex"
 	"fmt"
 	"os"
 	"path/filepath"
@@ -77,6 +75,5 @@ func subjects(all []string) string {
 }
 
 func inputOf(role string, given source) rules.Input {
-	sum := sha256.Sum256(given.data)
-	return rules.Input{Role: role, Name: filepath.Base(given.name), SHA256: hex.EncodeToString(sum[:])}
+	return rules.Input{Role: role, Name: filepath.Base(given.name), SHA256: given.sum()}
 }

@@ -113,7 +113,7 @@ func root(w world) *cobra.Command {
 	command.SetIn(w.in)
 	command.SetOut(w.out)
 	command.SetErr(w.err)
-	command.AddCommand(reviewCommand(w), basisCommand(w), draftCommand(w), schemaCommand(w), compareCommand(w), showCommand(w), spacingCommand(w))
+	command.AddCommand(reviewCommand(w), basisCommand(w), draftCommand(w), schemaCommand(w), compareCommand(w), showCommand(w), spacingCommand(w), planCommand(w), readingsCommand(w))
 	plainly(command)
 	return command
 }

@@ -1,6 +1,8 @@
 package main
 
 import (
+	"crypto/sha256"
+	"encoding/hex"
 	"errors"
 	"fmt"
 	"io"
@@ -165,6 +167,21 @@ func (r *reviewing) reviewOf(c *chain.Chain, given source) (*rules.Review, error
 	}
 	r.refusals(limits.name, review.Local)
 	return review, nil
+}
+
+// understood reads the description; its faults are all listed and end the run.
+func (r *reviewing) understood(given source) (*chain.Chain, error) {
+	c, faults := rules.Read(given.data)
+	if len(faults) > 0 {
+		return nil, r.faulty(given.name, faults)
+	}
+	return c, nil
+}
+
+// sum is the SHA-256 of the file.
+func (s source) sum() string {
+	sum := sha256.Sum256(s.data)
+	return hex.EncodeToString(sum[:])
 }
 
 // render makes every output before any of them is written; the note stands first.

@@ -8,6 +8,7 @@ import (
 
 	"kilovet/hv/quantity"
 	"kilovet/reports/digest"
+	"kilovet/reports/lines"
 	"kilovet/rules/compare"
 	"kilovet/rules/rule"
 )
@@ -23,28 +24,28 @@ const gutter = 10
 
 // Text writes the difference for a terminal.
 func Text(r *Report, o Options) []byte {
-	w := newWriter(o.Width)
-	w.hang("old", gutter, side(r.Old, r.Was))
-	w.hang("new", gutter, side(r.New, r.Is))
+	w := lines.New(o.Width)
+	w.Hang("old", gutter, side(r.Old, r.Was))
+	w.Hang("new", gutter, side(r.New, r.Is))
 	if r.Local.Name != "" {
-		w.hang("under", gutter, "the local limits of "+r.Local.Name)
+		w.Hang("under", gutter, "the local limits of "+r.Local.Name)
 	}
-	w.line("")
-	w.hang("", 0, sentence(r))
-	w.section("Changed inputs", len(r.Inputs))
+	w.Line("")
+	w.Hang("", 0, sentence(r))
+	w.Section("Changed inputs", len(r.Inputs))
 	for _, in := range r.Inputs {
-		w.hang("", 0, in.At)
-		w.hang("", 4, given(in.Old)+" → "+given(in.New)+rewritten(in))
+		w.Hang("", 0, in.At)
+		w.Hang("", 4, given(in.Old)+" → "+given(in.New)+rewritten(in))
 	}
-	w.section("Changed verdicts", len(r.Findings))
+	w.Section("Changed verdicts", len(r.Findings))
 	for _, e := range entries(r.Findings, o.All) {
 		e.write(w)
 	}
-	w.section("Moved figures", len(r.Figures))
+	w.Section("Moved figures", len(r.Figures))
 	for _, g := range groups(r.Figures) {
 		g.write(w, o.All)
 	}
-	return bytes.Clone(w.out.Bytes())
+	return bytes.Clone(w.Bytes())
 }
 
 func side(s Side, v rule.Verdict) string {
@@ -105,15 +106,15 @@ func groups(figures []compare.Figure) []*group {
 }
 
 // write shows the figures of a group, all or the one that moved most.
-func (g *group) write(w *writer, all bool) {
-	w.hang("", 0, g.id+": "+g.what)
+func (g *group) write(w *lines.Writer, all bool) {
+	w.Hang("", 0, g.id+": "+g.what)
 	if all || len(g.figures) == 1 {
 		for _, f := range g.figures {
-			w.hang("", 4, moved(f))
+			w.Hang("", 4, moved(f))
 		}
 		return
 	}
-	w.hang("", 4, fmt.Sprintf("%d moved, most: %s", len(g.figures), moved(g.most())))
+	w.Hang("", 4, fmt.Sprintf("%d moved, most: %s", len(g.figures), moved(g.most())))
 }
 
 // most is the figure with the largest relative change; one that came or went counts

@@ -2,6 +2,7 @@ package difference
 
 import (
 	"fmt"
+	"kilovet/reports/lines"
 	"slices"
 	"strings"
 
@@ -54,15 +55,15 @@ func (e entry) alike(other entry) bool {
 	return e.word == other.word && e.rule == other.rule && e.from == other.from && e.to == other.to
 }
 
-func (e entry) write(w *writer) {
+func (e entry) write(w *lines.Writer) {
 	name := e.rule
 	if n := len(e.subjects); n > mostSubjects {
 		name += fmt.Sprintf(": %s and %d more", strings.Join(e.subjects[:mostSubjects], "; "), n-mostSubjects)
 	} else if n > 0 {
 		name += ": " + strings.Join(e.subjects, "; ")
 	}
-	w.hang(e.word, gutter, name+": "+e.from+" → "+e.to)
+	w.Hang(e.word, gutter, name+": "+e.from+" → "+e.to)
 	if e.because != "" && len(e.subjects) <= 1 {
-		w.hang("", gutter, e.because)
+		w.Hang("", gutter, e.because)
 	}
 }

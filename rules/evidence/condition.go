@@ -4,7 +4,11 @@
 // computed it remembers for one review.
 package evidence
 
-import "strings"
+import (
+	"strings"
+
+	"kilovet/hv/quantity"
+)
 
 // State of a chain.
 type State string
@@ -40,6 +44,8 @@ type Condition struct {
 	Corner Corner
 	// Drive is the share of the state's drive, 1 where zero.
 	Drive float64
+	// Peak is the peak of the drive where it is set by hand; zero leaves it to the state.
+	Peak  quantity.Voltage
 	Fault Fault
 }
 
@@ -60,12 +66,13 @@ func (c Condition) key() conditionKey {
 	if c.Drive == 0 {
 		c.Drive = 1
 	}
-	return conditionKey{c.State, c.Corner, c.Drive, c.Fault.Name}
+	return conditionKey{c.State, c.Corner, c.Drive, c.Peak, c.Fault.Name}
 }
 
 type conditionKey struct {
 	state  State
 	corner Corner
 	drive  float64
+	peak   quantity.Voltage
 	fault  string
 }

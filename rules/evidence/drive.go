@@ -28,6 +28,8 @@ func (e *Evidence) Peak() (quantity.Voltage, error) {
 func (e *Evidence) fullPeak() (quantity.Voltage, error) {
 	d := e.chain.Drive
 	switch {
+	case e.condition.Peak != 0:
+		return e.condition.Peak, nil
 	case e.condition.State == Lost:
 		return e.limit()
 	case e.chain.Regulation == nil:

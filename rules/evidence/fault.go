@@ -63,7 +63,7 @@ func (e *Evidence) failure() (failure, error) {
 // unregulated is the peak of a drive that no regulation moves.
 func (e *Evidence) unregulated() (quantity.Voltage, error) {
 	share := e.condition.Drive
-	if e.condition.Fault.Loop == RunsAway && (share == 0 || share == 1) {
+	if e.condition.Fault.Loop == RunsAway && e.condition.Peak == 0 && (share == 0 || share == 1) {
 		return e.limit()
 	}
 	return e.Healthy().Peak()

@@ -35,7 +35,7 @@ func (e *Evidence) solution() (periodic, error) {
 // holds reports whether regulation is at work and at its full drive.
 func (e *Evidence) holds() bool {
 	share := e.condition.Drive
-	return e.chain.Regulation != nil && e.condition.State != Lost && (share == 0 || share == 1)
+	return e.condition.Peak == 0 && e.chain.Regulation != nil && e.condition.State != Lost && (share == 0 || share == 1)
 }
 
 // alike is the state of the nominal chain, whole and at full drive, to start from; nil

@@ -1,0 +1,73 @@
+// Package lines sets paragraphs and headings into lines of a width, for reports that
+// are read in a terminal. Everything of outside origin passes through digest.Clean.
+package lines
+
+import (
+	"bytes"
+	"strings"
+	"unicode/utf8"
+
+	"kilovet/reports/digest"
+)
+
+// Writer sets paragraphs into a width.
+type Writer struct {
+	out   bytes.Buffer
+	width int
+}
+
+// New is a writer of lines of at most a width: 80 where zero, and never below 40.
+func New(width int) *Writer {
+	if width == 0 {
+		width = 80
+	}
+	return &Writer{width: max(width, 40)}
+}
+
+// Line writes one line as it is, without spaces at its end.
+func (w *Writer) Line(s string) {
+	w.out.WriteString(strings.TrimRight(s, " "))
+	w.out.WriteByte('\n')
+}
+
+// Section writes a heading; nothing where nothing stands under it.
+func (w *Writer) Section(title string, entries int) {
+	if entries > 0 {
+		w.Line("")
+		w.Line(strings.ToUpper(title))
+		w.Line("")
+	}
+}
+
+// Hang writes a paragraph with a label before its first line, every line indented.
+func (w *Writer) Hang(label string, indent int, s string) {
+	line := label + strings.Repeat(" ", indent-utf8.RuneCountInString(label))
+	empty := true
+	for _, word := range w.words(s, indent) {
+		if !empty && utf8.RuneCountInString(line)+1+utf8.RuneCountInString(word) > w.width {
+			w.Line(line)
+			line, empty = strings.Repeat(" ", indent), true
+		}
+		if !empty {
+			line += " "
+		}
+		line, empty = line+word, false
+	}
+	w.Line(line)
+}
+
+// words takes a text apart; a word wider than a line is cut.
+func (w *Writer) words(s string, indent int) []string {
+	var all []string
+	for _, word := range strings.Fields(digest.Clean(s)) {
+		runes := []rune(word)
+		for most := w.width - indent; len(runes) > most; runes = runes[most:] {
+			all = append(all, string(runes[:most]))
+		}
+		all = append(all, string(runes))
+	}
+	return all
+}
+
+// Bytes is what was written.
+func (w *Writer) Bytes() []byte { return w.out.Bytes() }

@@ -1,0 +1,39 @@
+package procedure
+
+import (
+	"bytes"
+	"fmt"
+	"strings"
+
+	"kilovet/hv/quantity"
+	"kilovet/reports/digest"
+	"kilovet/rules/plan"
+)
+
+// Heading says which description a form belongs to.
+type Heading struct{ Document, Revision, SHA256 string }
+
+// Form writes the steps of a plan as a TOML form: what is read goes into it.
+func Form(p *plan.Plan, h Heading) []byte {
+	var out bytes.Buffer
+	fmt.Fprintln(&out, `# Readings of a first power-up. Take away the # before a value and write what was
+# read, with its unit; leave what was not read as it is. The drive of a step is the
+# peak (zero to peak) that was really set.`)
+	fmt.Fprintf(&out, "format      = 1\ndocument    = %s\nrevision    = %s\ndescription = %s\n", quoted(h.Document), quoted(h.Revision), quoted(h.SHA256))
+	for i := range p.Steps {
+		formStep(&out, &p.Steps[i])
+	}
+	return out.Bytes()
+}
+
+func formStep(out *bytes.Buffer, s *plan.Step) {
+	fmt.Fprintf(out, "\n[[step]]\nname  = %s\ndrive = %s\n", quoted(s.Name), quoted(quantity.Text(s.Peak)))
+	for _, r := range s.Readings {
+		fmt.Fprintf(out, "[[step.reading]]\ninstrument = %s\n# value = %s # expected %s\n", quoted(r.Instrument), quoted("… "+quantity.DimensionOf(r.Unit).SI), Band(r.Band))
+	}
+}
+
+// quoted writes a text as a TOML string.
+func quoted(s string) string {
+	return `"` + strings.NewReplacer(`\`, `\\`, `"`, `\"`).Replace(digest.Clean(s)) + `"`
+}

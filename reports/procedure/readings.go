@@ -1,0 +1,98 @@
+package procedure
+
+import (
+	"fmt"
+	"strings"
+
+	"kilovet/hv/quantity"
+	"kilovet/reports/lines"
+	"kilovet/rules/readings"
+)
+
+const readingsDeference = "What readings point to is a place to look first, with everything off and earthed. It is no proof, and a reading within its bounds is no permission to go on: local electrical codes and licensed judgement come first."
+
+// Readings writes what the readings of a form say.
+func Readings(c *readings.Comparison, o Options) []byte {
+	w := lines.New(o.Width)
+	if o.Note != "" {
+		w.Hang("", 0, o.Note)
+	}
+	w.Hang("", 0, "Readings: "+o.Title)
+	rows(w, c.Rows)
+	w.Line("")
+	switch {
+	case len(c.Rows) == 0:
+		w.Hang("", 0, "Nothing was read: nothing is known.")
+	case c.Sound:
+		w.Hang("", 0, fmt.Sprintf("Every reading (%d) lies within its bounds; nothing points to a fault that these readings could show.", len(c.Rows)))
+	default:
+		suspects(w, c)
+	}
+	w.Line("")
+	w.Hang("", 0, readingsDeference)
+	return w.Bytes()
+}
+
+func rows(w *lines.Writer, all []readings.Row) {
+	step := ""
+	for _, r := range all {
+		if r.Step != step {
+			w.Line("")
+			w.Hang("", 0, r.Step)
+			step = r.Step
+		}
+		word := "within  "
+		if !r.Within {
+			word = "OUTSIDE "
+		}
+		w.Hang("  "+word, 10, fmt.Sprintf("%s: %s, expected %s%s", r.Instrument, quantity.DimensionOf(r.Expected.Unit).Text(r.Read), Band(r.Expected), surplus(r)))
+	}
+}
+
+// surplus names what a current above the computed one is.
+func surplus(r readings.Row) string {
+	more := quantity.Current(r.Read - r.Expected.Value)
+	if r.Expected.Unit != "A" || more <= 0 {
+		return ""
+	}
+	return fmt.Sprintf("; %s more than computed: leakage or corona, unless an error of reading", quantity.Text(more))
+}
+
+func suspects(w *lines.Writer, c *readings.Comparison) {
+	w.Hang("", 0, fmt.Sprintf("Switch off. Readings lie outside their bounds; from a healthy chain they are %s standard errors away (rms). Of %d things that may be wrong, %d would not show in these readings.",
+		quantity.Significant(c.Healthy), c.Tried, c.Unseen))
+	if len(c.Suspects) == 0 {
+		w.Line("")
+		w.Hang("", 0, "Nothing that was tried explains them better than a healthy chain does.")
+	}
+	w.Section("What they point to, the best first", len(c.Suspects))
+	for i, s := range c.Suspects {
+		text := strings.Join(shortened(s.Names), "; or ")
+		text += fmt.Sprintf(" (%s standard errors", quantity.Significant(s.Fit))
+		if !s.Fits() {
+			text += ": explains only part of it"
+		}
+		w.Hang(fmt.Sprintf("%d  ", i+1), 3, text+")")
+	}
+	w.Section("What would tell them apart", len(c.Apart))
+	for _, a := range c.Apart {
+		var volts []string
+		for i, v := range a.Expected {
+			volts = append(volts, fmt.Sprintf("%s if it is %d", quantity.Text(quantity.Voltage(v)), i+1))
+		}
+		w.Hang("", 0, fmt.Sprintf("the voltage of %s to ground, in the step %q: %s", a.Node, a.Step, strings.Join(volts, ", ")))
+	}
+	w.Section("What could not be computed", len(c.Open))
+	for _, o := range c.Open {
+		w.Hang("- ", 2, o)
+	}
+}
+
+// shortened keeps a list of what looks alike readable.
+func shortened(names []string) []string {
+	const most = 8
+	if len(names) <= most {
+		return names
+	}
+	return append(names[:most:most], fmt.Sprintf("%d more that read alike", len(names)-most))
+}

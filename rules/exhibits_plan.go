@@ -1,0 +1,105 @@
+package rules
+
+import (
+	"fmt"
+	"strings"
+
+	"kilovet/hv/quantity"
+	"kilovet/rules/evidence"
+	"kilovet/rules/exhibit"
+	"kilovet/rules/plan"
+)
+
+// powerUp shows the plan of the first power-up as sheets to fill in.
+func powerUp(e *evidence.Evidence) []exhibit.Table {
+	p, err := plan.Of(e)
+	if err != nil {
+		return nil
+	}
+	tables := []exhibit.Table{
+		coldChecks(p),
+		todo("plan.before", "Before the first voltage", p.Before),
+		steps(p),
+		expectations(p),
+		todo("plan.stops", "Switch off at once at", p.Stops),
+		todo("plan.after", "After every step and at the end", p.After),
+		todo("plan.open", "Not planned", p.Open),
+	}
+	var filled []exhibit.Table
+	for _, t := range tables {
+		if len(t.Rows) > 0 {
+			t.Chapter, t.Basis = exhibit.Plan, evidence.Basis
+			filled = append(filled, t)
+		}
+	}
+	return filled
+}
+
+// done is the column in which people write.
+var done = exhibit.Column{Head: "done, read"}
+
+func coldChecks(p *plan.Plan) exhibit.Table {
+	t := exhibit.Table{ID: "plan.cold", Title: "Cold checks: all off, unplugged, earthed first",
+		Columns: []exhibit.Column{{Head: "what"}, {Head: "across"}, {Head: "with"}, {Head: "expected"}, done}}
+	for _, c := range p.Cold {
+		expected := c.Words
+		if expected == "" {
+			expected = bounds(c.Expected)
+		}
+		t.Rows = append(t.Rows, texts(c.What, c.Across, c.With, expected, ""))
+	}
+	return t
+}
+
+func todo(id, title string, list []string) exhibit.Table {
+	t := exhibit.Table{ID: id, Title: title, Columns: []exhibit.Column{{Head: "what"}, done}}
+	for _, text := range list {
+		t.Rows = append(t.Rows, texts(text, ""))
+	}
+	return t
+}
+
+func steps(p *plan.Plan) exhibit.Table {
+	t := exhibit.Table{ID: "plan.steps", Title: "Steps of the first power-up",
+		Columns: []exhibit.Column{{Head: "step"}, {Head: "first"}, {Head: "drive, peak", Unit: "V"}, {Head: "held", Unit: "s"}, {Head: "output", Unit: "V"}, {Head: "drive power", Unit: "W"}, {Head: "to 60 V after switching off"}, done}}
+	for _, s := range p.Steps {
+		t.Rows = append(t.Rows, []exhibit.Cell{exhibit.Words(s.Name), exhibit.Words(strings.Join(s.First, " ")), exhibit.Number(s.Peak), exhibit.Number(s.Dwell),
+			exhibit.Number(s.Output), exhibit.Number(s.Power), exhibit.Words(until(s.Discharge)), exhibit.Words("")})
+	}
+	return t
+}
+
+func until(d evidence.Discharge) string {
+	if d.Never {
+		return d.Node + " only by the rod"
+	}
+	return quantity.Text(d.Time) + ", " + d.Node + " last"
+}
+
+func expectations(p *plan.Plan) exhibit.Table {
+	t := exhibit.Table{ID: "plan.readings", Title: "What every instrument should show",
+		Columns: []exhibit.Column{{Head: "step"}, {Head: "instrument"}, {Head: "expected"}, done}}
+	for _, s := range p.Steps {
+		for _, r := range s.Readings {
+			t.Rows = append(t.Rows, texts(s.Name, r.Instrument, bounds(r.Band), ""))
+		}
+	}
+	return t
+}
+
+// bounds writes a value with what it should lie between.
+func bounds(b plan.Band) string {
+	d := quantity.DimensionOf(b.Unit)
+	if quantity.Equal(b.Low, b.High) {
+		return d.Text(b.Value)
+	}
+	return fmt.Sprintf("%s (%s to %s)", d.Text(b.Value), d.Text(b.Low), d.Text(b.High))
+}
+
+func texts(all ...string) []exhibit.Cell {
+	cells := make([]exhibit.Cell, len(all))
+	for i, t := range all {
+		cells[i] = exhibit.Words(t)
+	}
+	return cells
+}

@@ -1,0 +1,130 @@
+package plan
+
+import (
+	"kilovet/hv/chain"
+	"kilovet/hv/circuit"
+	"kilovet/hv/quantity"
+	"kilovet/rules/evidence"
+)
+
+// The instruments that a description has without naming them.
+const meter = "divider meter"
+
+// driveShare is how well the peak of the drive is set or read: common practice, no
+// source.
+const driveShare = 0.02
+
+// bodyResistance names the loads that the instruments are.
+const probeName = "instrument "
+
+// Bench is the change of the circuit that connects the described voltmeters.
+func Bench(c *chain.Chain) evidence.Fault {
+	var fitted []*chain.Instrument
+	for i := range c.Instruments {
+		if !c.Instruments[i].ReadsCurrent() {
+			fitted = append(fitted, &c.Instruments[i])
+		}
+	}
+	if len(fitted) == 0 {
+		return evidence.Fault{}
+	}
+	return evidence.Fault{Name: "the instruments of the plan connected", Edit: func(c *circuit.Circuit) *circuit.Circuit {
+		for _, in := range fitted {
+			c = c.Bridge(probeName+in.Name.V, in.At.V, in.To.Or("ground"), in.Resistance.V)
+		}
+		return c
+	}}
+}
+
+// dial is one instrument: how it reads and how far it may be wrong.
+type dial struct {
+	name  string
+	unit  string
+	error func(*evidence.Evidence) (float64, error)
+	read  func(*evidence.Evidence) (float64, error)
+}
+
+// dials lists the instruments of a chain, the divider's meter first.
+func dials(c *chain.Chain) []dial {
+	var all []dial
+	if c.Divider != nil && c.Divider.Meter != nil {
+		all = append(all, dial{meter, "V", dividerError, func(e *evidence.Evidence) (float64, error) {
+			v, err := e.Reads("divider.tap", "ground")
+			return float64(v), err
+		}})
+	}
+	for i := range c.Instruments {
+		in := &c.Instruments[i]
+		d := dial{name: in.Name.V, unit: "V", error: func(*evidence.Evidence) (float64, error) { return float64(in.Accuracy.V), nil },
+			read: func(e *evidence.Evidence) (float64, error) {
+				v, err := e.Reads(in.At.V, in.To.Or("ground"))
+				return float64(v), err
+			}}
+		if in.ReadsCurrent() {
+			d.unit = "A"
+			d.read = func(e *evidence.Evidence) (float64, error) {
+				i, err := e.ReturnCurrent()
+				return float64(i), err
+			}
+		}
+		all = append(all, d)
+	}
+	return all
+}
+
+func dividerError(e *evidence.Evidence) (float64, error) {
+	wrong, err := e.DividerError()
+	return float64(wrong), err
+}
+
+// Readings is what every instrument should show under a condition, with bounds: the
+// spread of the parts' tolerances, the setting of the drive and the instrument's own
+// error, added up.
+func Readings(e *evidence.Evidence, at evidence.Condition) ([]Reading, error) {
+	var all []Reading
+	for _, d := range dials(e.Chain()) {
+		b, err := d.band(e, at)
+		if err != nil {
+			return nil, err
+		}
+		all = append(all, Reading{d.name, b})
+	}
+	return all, nil
+}
+
+func (d dial) band(e *evidence.Evidence, at evidence.Condition) (Band, error) {
+	b := Band{Unit: d.unit}
+	for _, corner := range []evidence.Corner{evidence.Nominal, evidence.AllLow, evidence.AllHigh} {
+		at.Corner = corner
+		v, err := d.read(e.Under(at))
+		if err != nil {
+			return b, err
+		}
+		if corner == evidence.Nominal {
+			b.Value, b.Low, b.High = v, v, v
+		}
+		b.Low, b.High = min(b.Low, v), max(b.High, v)
+	}
+	at.Corner = evidence.Nominal
+	wrong, err := d.error(e.Under(at))
+	b.Low -= b.Value * (wrong + driveShare)
+	b.High += b.Value * (wrong + driveShare)
+	return b, err
+}
+
+// setting says in words how the drive is set in a step.
+func setting(peak quantity.Voltage) string { return quantity.Text(peak) + " peak" }
+
+// Values is what every instrument shows under a condition, in the order of Readings
+// and in SI units, without bounds.
+func Values(e *evidence.Evidence, at evidence.Condition) ([]float64, error) {
+	var all []float64
+	for _, d := range dials(e.Chain()) {
+		v, err := d.read(e.Under(at))
+		if err != nil {
+			return nil, err
+		}
+		all = append(all, v)
+	}
+	return all, nil
+}

@@ -1,0 +1,95 @@
+package readings
+
+import (
+	"kilovet/hv/quantity"
+	"kilovet/rules/evidence"
+	"kilovet/rules/plan"
+)
+
+// Comparison is what the readings of a form say.
+type Comparison struct {
+	Rows []Row
+	// Sound reports that there are readings and every one lies within its bounds.
+	Sound bool
+	// Suspects are what deviating readings point to, what fits best first.
+	Suspects []Suspect
+	// Apart are further readings that would tell the suspects apart.
+	Apart []Apart
+	// Healthy is how far the readings lie from a healthy chain, in standard errors (rms).
+	Healthy float64
+	// Tried counts the hypotheses; Unseen those that these readings cannot tell from a
+	// healthy chain; Open names those that could not be computed.
+	Tried, Unseen int
+	Open          []string
+}
+
+// Row is one reading beside what is expected at the drive that was really set.
+type Row struct {
+	Step, Instrument string
+	Read             float64
+	Expected         plan.Band
+	Within           bool
+}
+
+// taken is one reading with where and how it was taken.
+type taken struct {
+	step     *plan.Step
+	at       evidence.Condition // the plan's step at the drive that was set
+	read     float64
+	expected plan.Band
+	place    int // of its instrument in the step
+}
+
+// Of compares a form that was read without faults with its plan.
+func Of(e *evidence.Evidence, p *plan.Plan, f *File) (*Comparison, error) {
+	all, err := gathered(e, p, f)
+	if err != nil {
+		return nil, err
+	}
+	c := &Comparison{Sound: len(all) > 0}
+	for _, t := range all {
+		r := Row{t.step.Name, t.step.Readings[t.place].Instrument, t.read, t.expected, t.expected.Holds(t.read)}
+		c.Rows = append(c.Rows, r)
+		c.Sound = c.Sound && r.Within
+	}
+	if len(all) > 0 && !c.Sound {
+		diagnose(e, all, c)
+	}
+	return c, nil
+}
+
+// gathered lists the readings that were taken, step by step.
+func gathered(e *evidence.Evidence, p *plan.Plan, f *File) ([]taken, error) {
+	var all []taken
+	for i := range f.Steps {
+		s := &f.Steps[i]
+		planned := find(p, s.Name.V)
+		at := planned.Condition
+		at.Peak = s.Drive.V
+		var expected []plan.Reading
+		for j := range s.Readings {
+			r := &s.Readings[j]
+			if !r.Value.Set() {
+				continue
+			}
+			if expected == nil {
+				var err error
+				if expected, err = plan.Readings(e, at); err != nil {
+					return nil, err
+				}
+			}
+			all = append(all, reading(planned, at, r, expected))
+		}
+	}
+	return all, nil
+}
+
+func reading(s *plan.Step, at evidence.Condition, r *Reading, expected []plan.Reading) taken {
+	for i, x := range expected {
+		if x.Instrument == r.Instrument.V {
+			v, _ := quantity.DimensionOf(x.Unit).Parse(r.Value.V) // the reader has parsed it already
+			return taken{s, at, v, x.Band, i}
+		}
+	}
+	panic("readings: " + r.Instrument.V + " was read, and the plan has no such instrument")
+}

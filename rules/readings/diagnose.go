@@ -1,0 +1,174 @@
+package readings
+
+import (
+	"math"
+	"runtime"
+	"slices"
+	"sync"
+
+	"kilovet/hv/match"
+	"kilovet/rules/evidence"
+)
+
+// Suspect is what the readings point to: hypotheses that these readings cannot tell
+// apart.
+type Suspect struct {
+	Names []string // the best first
+	// Fit is how far the readings lie from it, rms in standard errors: about 1 where it
+	// is the truth.
+	Fit float64
+
+	trial *trial
+}
+
+// trial is a hypothesis with what it predicts.
+type trial struct {
+	hypothesis
+	predicted []float64
+	misfit    float64
+	err       error
+	within    bool // lies between two that were computed
+}
+
+func (t *trial) counts() int {
+	if t.within {
+		return 0
+	}
+	return 1
+}
+
+const (
+	// most is how many suspects are named.
+	most = 5
+	// alike is the misfit below which two hypotheses cannot be told apart: two standard
+	// errors in one reading.
+	alike = 4
+	// fits is the rms deviation in standard errors up to which a hypothesis explains the
+	// readings.
+	fits = 3
+)
+
+// diagnose tries every hypothesis and names what fits better than a healthy chain.
+func diagnose(e *evidence.Evidence, all []taken, c *Comparison) {
+	b := newBench(e, all)
+	healthy := trial{predicted: b.healthy, misfit: b.misfit(b.read, b.healthy)}
+	c.Healthy = b.rms(healthy.misfit)
+	trials := b.tryAll(hypotheses(e))
+	c.Tried = len(trials)
+	trials = append(trials, b.between(trials)...)
+	var seen []*trial
+	for i := range trials {
+		t := &trials[i]
+		switch {
+		case t.err != nil:
+			c.Open = append(c.Open, t.name+": "+t.err.Error())
+		case b.misfit(t.predicted, b.healthy) < alike:
+			c.Unseen += t.counts()
+		case t.misfit < healthy.misfit-alike:
+			seen = append(seen, t)
+		}
+	}
+	slices.SortStableFunc(seen, func(x, y *trial) int {
+		switch {
+		case x.misfit < y.misfit:
+			return -1
+		case x.misfit > y.misfit:
+			return 1
+		}
+		return 0
+	})
+	c.Suspects = b.grouped(seen)
+	c.Apart = b.apart(c.Suspects)
+}
+
+// grouped puts together what these readings cannot tell apart, and keeps the best.
+func (b *bench) grouped(sorted []*trial) []Suspect {
+	var all []Suspect
+next:
+	for _, t := range sorted {
+		for i := range all {
+			if b.misfit(t.predicted, all[i].trial.predicted) < alike {
+				all[i].Names = append(all[i].Names, t.name)
+				continue next
+			}
+		}
+		if len(all) < most {
+			all = append(all, Suspect{[]string{t.name}, b.rms(t.misfit), t})
+		}
+	}
+	return all
+}
+
+// Fits reports whether a suspect explains the readings.
+func (s Suspect) Fits() bool { return s.Fit <= fits }
+
+// rms is a misfit as the rms deviation in standard errors.
+func (b *bench) rms(misfit float64) float64 { return math.Sqrt(misfit / float64(len(b.all))) }
+
+func (b *bench) misfit(read, predicted []float64) float64 {
+	return match.Misfit(read, predicted, b.errors(predicted), b.common)
+}
+
+// between tries what lies between neighbours of one scale, on the straight line from
+// the readings of the one to those of the other.
+func (b *bench) between(trials []trial) []trial {
+	const parts = 8
+	var all []trial
+	for i := 1; i < len(trials); i++ {
+		one, other := &trials[i-1], &trials[i]
+		if other.scale == "" || one.scale != other.scale || one.err != nil || other.err != nil {
+			continue
+		}
+		best := trial{misfit: min(one.misfit, other.misfit)}
+		for k := 1; k < parts; k++ {
+			p := blend(one.predicted, other.predicted, float64(k)/parts)
+			if m := b.misfit(b.read, p); m < best.misfit {
+				best.predicted, best.misfit = p, m
+			}
+		}
+		if best.predicted != nil {
+			best.hypothesis = other.hypothesis
+			best.name = one.scale + " " + one.size + " to " + other.size
+			best.within = true
+			all = append(all, best)
+		}
+	}
+	return all
+}
+
+func blend(a, b []float64, share float64) []float64 {
+	p := make([]float64, len(a))
+	for i := range a {
+		p[i] = a[i] + share*(b[i]-a[i])
+	}
+	return p
+}
+
+// tryAll computes every hypothesis, as many at once as there are processors; results
+// are placed by index.
+func (b *bench) tryAll(list []hypothesis) []trial {
+	trials := make([]trial, len(list))
+	next := make(chan int)
+	var done sync.WaitGroup
+	for range runtime.GOMAXPROCS(0) {
+		done.Go(func() {
+			for i := range next {
+				trials[i] = b.try(list[i])
+			}
+		})
+	}
+	for i := range list {
+		next <- i
+	}
+	close(next)
+	done.Wait()
+	return trials
+}
+
+func (b *bench) try(h hypothesis) trial {
+	t := trial{hypothesis: h}
+	if t.predicted, t.err = b.predict(h.change); t.err == nil {
+		t.misfit = b.misfit(b.read, t.predicted)
+	}
+	return t
+}

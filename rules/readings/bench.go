@@ -100,14 +100,14 @@ func (b *bench) predict(change evidence.Fault) ([]float64, error) {
 		}
 		for i, t := range b.all {
 			if t.at.State == state {
-				values[i] = at[t.place] + (top[t.place]-at[t.place])*along(t.at.Peak, low.Peak, high.Peak)
+				values[i] = at[t.place] + (top[t.place]-at[t.place])*share(t.at.Peak, low.Peak, high.Peak)
 			}
 		}
 	}
 	return values, nil
 }
 
-func along(x, low, high quantity.Voltage) float64 {
+func share(x, low, high quantity.Voltage) float64 {
 	if low >= high {
 		return 0
 	}

@@ -109,31 +109,44 @@ func (b *bench) misfit(read, predicted []float64) float64 {
 	return match.Misfit(read, predicted, b.errors(predicted), b.common)
 }
 
-// between tries what lies between neighbours of one scale, on the straight line from
-// the readings of the one to those of the other.
+// between tries what lies between neighbours of one scale, and between the last of it
+// and a healthy part, on the straight line from the readings of the one to those of the
+// other.
 func (b *bench) between(trials []trial) []trial {
-	const parts = 8
 	var all []trial
-	for i := 1; i < len(trials); i++ {
-		one, other := &trials[i-1], &trials[i]
-		if other.scale == "" || one.scale != other.scale || one.err != nil || other.err != nil {
+	for i := range trials {
+		one := &trials[i]
+		if one.off == nil || one.err != nil {
 			continue
 		}
-		best := trial{misfit: min(one.misfit, other.misfit)}
-		for k := 1; k < parts; k++ {
-			p := blend(one.predicted, other.predicted, float64(k)/parts)
-			if m := b.misfit(b.read, p); m < best.misfit {
-				best.predicted, best.misfit = p, m
+		other, size := b.healthy, one.off.beyond+" "+one.off.size
+		if i+1 < len(trials) && trials[i+1].off != nil && trials[i+1].off.scale == one.off.scale {
+			next := &trials[i+1]
+			other, size = next.predicted, one.off.size+" to "+next.off.size
+			if next.err != nil {
+				continue
 			}
 		}
-		if best.predicted != nil {
-			best.hypothesis = other.hypothesis
-			best.name = one.scale + " " + one.size + " to " + other.size
-			best.within = true
-			all = append(all, best)
+		if t, better := b.along(one, other); better {
+			t.name = one.off.text(size)
+			all = append(all, t)
 		}
 	}
 	return all
+}
+
+// along is the best on the line from a trial to other readings, if it is better than
+// its ends.
+func (b *bench) along(one *trial, other []float64) (trial, bool) {
+	const parts = 8
+	best := trial{hypothesis: one.hypothesis, within: true, misfit: min(one.misfit, b.misfit(b.read, other))}
+	for k := 1; k < parts; k++ {
+		p := blend(one.predicted, other, float64(k)/parts)
+		if m := b.misfit(b.read, p); m < best.misfit {
+			best.predicted, best.misfit = p, m
+		}
+	}
+	return best, best.predicted != nil
 }
 
 func blend(a, b []float64, share float64) []float64 {

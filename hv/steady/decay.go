@@ -16,7 +16,8 @@ type Decay struct {
 	Work  Work
 
 	circuit *circuit.Circuit
-	history []Voltages // by time
+	history []Voltages      // by time
+	idle    map[string]bool // diodes that never carried anything
 }
 
 // Discharge follows a circuit from the given potentials after all sources are
@@ -27,19 +28,34 @@ type Decay struct {
 //
 // Errors: a lack for a doubted capacitance or a resistor without a value.
 func Discharge(c *circuit.Circuit, from Voltages, limit quantity.Voltage) (*Decay, error) {
+	return discharge(c, from, limit, 1e-3)
+}
+
+func discharge(c *circuit.Circuit, from Voltages, limit quantity.Voltage, tolerance float64) (*Decay, error) {
 	bare := c.Each(func(e *circuit.Element) bool { return e.Permanent || e.Kind == circuit.Capacitor })
 	r, err := runDown(bare, from, quiet(bare, false))
 	if err != nil {
 		return nil, err
 	}
 	d := &Decay{Limit: limit, circuit: bare, Times: []quantity.Time{0}, history: []Voltages{from}}
-	p := pace{tolerance: 2e-4, floor: 0.1 * float64(limit), done: 1e-3 * float64(limit)}
+	p := pace{tolerance: tolerance, floor: 0.1 * float64(limit), done: 1e-3 * float64(limit)}
 	err = r.run(p, func(t float64) {
 		d.Times = append(d.Times, quantity.Time(t))
 		d.history = append(d.history, r.potentials())
 	})
-	d.Work = r.work
+	d.Work, d.idle = r.work, r.idle()
 	return d, err
+}
+
+// idle are the diodes that have passed no charge.
+func (r *rundown) idle() map[string]bool {
+	idle := map[string]bool{}
+	for i := range r.valves {
+		if r.valves[i].charge == 0 {
+			idle[r.valves[i].element.Name] = true
+		}
+	}
+	return idle
 }
 
 func (r *rundown) potentials() Voltages {

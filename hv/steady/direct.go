@@ -130,7 +130,7 @@ func (s *State) solve() {
 	m := newMesh(s.network.joints, pairs)
 	g, current := make([]float64, m.size), make([]float64, m.nodes)
 	for _, b := range all {
-		g[m.slots[b.from][b.to]] += b.g
+		g[m.slot(b.from, b.to)] += b.g
 		current[b.from] -= b.g * b.emf
 		current[b.to] += b.g * b.emf
 	}

@@ -1,5 +1,7 @@
 package steady
 
+import "math/bits"
+
 // mesh is the pattern in which a network of conductances is solved by removing one
 // node after another: the star of conductances at a node becomes the equivalent
 // mesh between its neighbours (A. Rosen, J. IEE 62 (1924) 916; memory). Nothing is
@@ -8,38 +10,33 @@ package steady
 // Heyman, Oper. Res. 33 (1985) 1107, for Markov chains; memory). Ground is node 0.
 type mesh struct {
 	nodes  int
-	slots  [][]int // slot of the conductance between two nodes; −1 where there is none
+	slots  []int32 // by two nodes: slot of the conductance between them, or noSlot
 	size   int     // number of slots
 	pivots []pivot
+	arms   []arm
+	fills  []fill
 }
 
-// pivot is one node to remove: its arms to nodes still there, and which slots
-// receive the mesh that replaces them.
-type pivot struct {
-	node  int
-	arms  []arm
-	fills []fill
-}
+// pivot is one node to remove: where its arms to nodes still there end in the list
+// of all, and where the slots that receive the mesh that replaces them.
+type pivot struct{ node, arms, fills int32 }
 
-type arm struct{ node, slot int }
+type arm struct{ node, slot int32 }
 
-type fill struct{ one, other, slot int }
+type fill struct{ one, other, slot int32 }
 
 const noSlot = -1
 
 // newMesh plans the removal for a network whose conductances join the given pairs.
 func newMesh(nodes int, pairs [][2]int) *mesh {
-	m := &mesh{nodes: nodes, slots: make([][]int, nodes)}
+	m := &mesh{nodes: nodes, slots: make([]int32, nodes*nodes)}
 	for i := range m.slots {
-		m.slots[i] = make([]int, nodes)
-		for j := range m.slots[i] {
-			m.slots[i][j] = noSlot
-		}
+		m.slots[i] = noSlot
 	}
 	for _, p := range pairs {
 		m.slot(p[0], p[1])
 	}
-	m.plan()
+	m.plan(newCrowd(nodes, pairs))
 	return m
 }
 
@@ -48,59 +45,102 @@ func (m *mesh) slot(i, j int) int {
 	if i == j {
 		return noSlot
 	}
-	if m.slots[i][j] == noSlot {
-		m.slots[i][j], m.slots[j][i] = m.size, m.size
+	s := &m.slots[i*m.nodes+j]
+	if *s == noSlot {
+		*s = int32(m.size)
+		m.slots[j*m.nodes+i] = *s
 		m.size++
 	}
-	return m.slots[i][j]
+	return int(*s)
 }
 
 // plan removes the node with the fewest neighbours first.
-func (m *mesh) plan() {
-	left := make([]bool, m.nodes)
-	for i := range left {
-		left[i] = true
-	}
+func (m *mesh) plan(c *crowd) {
 	for range m.nodes - 1 {
-		node, arms := m.leanest(left)
-		left[node] = false
-		p := pivot{node: node, arms: arms}
+		node := c.leanest()
+		first := len(m.arms)
+		for _, j := range c.remove(node) {
+			m.arms = append(m.arms, arm{int32(j), int32(m.slot(node, j))})
+		}
+		arms := m.arms[first:]
 		for i, a := range arms {
 			for _, b := range arms[:i] {
-				p.fills = append(p.fills, fill{a.slot, b.slot, m.slot(a.node, b.node)})
+				m.fills = append(m.fills, fill{a.slot, b.slot, int32(m.slot(int(a.node), int(b.node)))})
 			}
 		}
-		m.pivots = append(m.pivots, p)
+		m.pivots = append(m.pivots, pivot{int32(node), int32(len(m.arms)), int32(len(m.fills))})
 	}
 }
 
-func (m *mesh) leanest(left []bool) (best int, arms []arm) {
-	for i := 1; i < m.nodes; i++ {
-		if !left[i] {
-			continue
-		}
-		if a := m.arms(i, left); best == 0 || len(a) < len(arms) {
-			best, arms = i, a
-		}
-	}
-	return best, arms
+// crowd is who is whose neighbour among the nodes that are left.
+type crowd struct {
+	words  int
+	bits   []uint64 // by node, a bit for each neighbour
+	degree []int    // by node; −1 where it is gone
 }
 
-func (m *mesh) arms(node int, left []bool) []arm {
-	var arms []arm
-	for j, s := range m.slots[node] {
-		if s != noSlot && left[j] {
-			arms = append(arms, arm{j, s})
+func newCrowd(nodes int, pairs [][2]int) *crowd {
+	c := &crowd{words: (nodes + 63) / 64, degree: make([]int, nodes)}
+	c.bits = make([]uint64, nodes*c.words)
+	for _, p := range pairs {
+		if p[0] != p[1] {
+			c.of(p[0])[p[1]/64] |= 1 << (p[1] % 64)
+			c.of(p[1])[p[0]/64] |= 1 << (p[0] % 64)
 		}
 	}
-	return arms
+	for i := range c.degree {
+		c.degree[i] = c.count(i)
+	}
+	return c
+}
+
+func (c *crowd) of(i int) []uint64 { return c.bits[i*c.words : (i+1)*c.words] }
+
+func (c *crowd) count(i int) int {
+	d := 0
+	for _, w := range c.of(i) {
+		d += bits.OnesCount64(w)
+	}
+	return d
+}
+
+// leanest is the first node but ground with the fewest neighbours.
+func (c *crowd) leanest() int {
+	best := 0
+	for i := 1; i < len(c.degree); i++ {
+		if d := c.degree[i]; d >= 0 && (best == 0 || d < c.degree[best]) {
+			best = i
+		}
+	}
+	return best
+}
+
+// remove takes a node out, joins its neighbours among themselves and lists them.
+func (c *crowd) remove(i int) []int {
+	var list []int
+	for k, w := range c.of(i) {
+		for ; w != 0; w &= w - 1 {
+			list = append(list, k*64+bits.TrailingZeros64(w))
+		}
+	}
+	for _, j := range list {
+		row := c.of(j)
+		for k, w := range c.of(i) {
+			row[k] |= w
+		}
+		row[i/64] &^= 1 << (i % 64)
+		row[j/64] &^= 1 << (j % 64)
+		c.degree[j] = c.count(j)
+	}
+	c.degree[i] = -1
+	return list
 }
 
 // factors are the conductances of a mesh with all nodes removed.
 type factors struct {
-	mesh *mesh
-	g    []float64 // by slot
-	sum  []float64 // by pivot: all conductance at the node when it was removed
+	mesh  *mesh
+	g     []float64 // by slot
+	share []float64 // by pivot: one over all conductance at the node when it was removed; zero where there was none
 }
 
 func (m *mesh) newFactors() *factors {
@@ -111,45 +151,51 @@ func (m *mesh) newFactors() *factors {
 func (f *factors) factor(g []float64) {
 	copy(f.g, g)
 	clear(f.g[len(g):])
+	arms, fills := int32(0), int32(0)
 	for k := range f.mesh.pivots {
 		p := &f.mesh.pivots[k]
 		sum := 0.0
-		for _, a := range p.arms {
+		for _, a := range f.mesh.arms[arms:p.arms] {
 			sum += f.g[a.slot]
 		}
-		f.sum[k] = sum
-		if sum == 0 {
-			continue
+		f.share[k] = 0
+		if sum > 0 {
+			share := 1 / sum
+			f.share[k] = share
+			for _, x := range f.mesh.fills[fills:p.fills] {
+				f.g[x.slot] += f.g[x.one] * share * f.g[x.other]
+			}
 		}
-		for _, x := range p.fills {
-			f.g[x.slot] += f.g[x.one] * f.g[x.other] / sum
-		}
+		arms, fills = p.arms, p.fills
 	}
 }
 
 // solve finds the potentials for the currents fed into the nodes, which it uses up.
 // A node that hangs on nothing keeps the potential it had in v.
 func (f *factors) solve(current, v []float64) {
+	arms := int32(0)
 	for k := range f.mesh.pivots {
 		p := &f.mesh.pivots[k]
-		if f.sum[k] == 0 {
-			continue
-		}
-		share := current[p.node] / f.sum[k]
-		for _, a := range p.arms {
+		share := current[p.node] * f.share[k]
+		for _, a := range f.mesh.arms[arms:p.arms] {
 			current[a.node] += share * f.g[a.slot]
 		}
+		arms = p.arms
 	}
 	v[0] = 0
 	for k := len(f.mesh.pivots) - 1; k >= 0; k-- {
 		p := &f.mesh.pivots[k]
-		if f.sum[k] == 0 {
+		if f.share[k] == 0 {
 			continue
 		}
+		first := int32(0)
+		if k > 0 {
+			first = f.mesh.pivots[k-1].arms
+		}
 		total := current[p.node]
-		for _, a := range p.arms {
+		for _, a := range f.mesh.arms[first:p.arms] {
 			total += f.g[a.slot] * v[a.node]
 		}
-		v[p.node] = total / f.sum[k]
+		v[p.node] = total * f.share[k]
 	}
 }

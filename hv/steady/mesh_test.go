@@ -14,7 +14,7 @@ func solved(nodes int, pairs [][2]int, g, current []float64) []float64 {
 	slots := make([]float64, m.size)
 	for i, p := range pairs {
 		if p[0] != p[1] {
-			slots[m.slots[p[0]][p[1]]] += g[i]
+			slots[m.slot(p[0], p[1])] += g[i]
 		}
 	}
 	f := m.newFactors()
@@ -97,8 +97,8 @@ func TestMeshOfALadderIsLean(t *testing.T) {
 			t.Fatal(err)
 		}
 		total := 0
-		for _, p := range r.mesh.pivots {
-			total += len(p.fills)
+		for range 1 {
+			total += len(r.mesh.fills)
 		}
 		return total
 	}

@@ -2,6 +2,7 @@ package steady
 
 import (
 	"math"
+	"slices"
 
 	"kilovet/hv/circuit"
 	"kilovet/hv/lack"
@@ -24,6 +25,7 @@ type rundown struct {
 	diode   float64   // ohm, common to all diodes that conduct; zero for ideal ones
 	gOn     float64   // of a conducting diode
 	lost    bool      // the diodes did not settle
+	fresh   bool      // the factors are those of the present step and diodes
 	work    Work
 }
 
@@ -42,6 +44,8 @@ type edge struct {
 type store struct {
 	edge
 	c, u, start float64
+	g           float64         // of an implicit Euler stage
+	rise        [stages]float64 // slopes of the stages times the step
 }
 
 // wire is a resistor.
@@ -58,8 +62,8 @@ type valve struct {
 	flow
 }
 
-// flow counts the charge through an edge.
-type flow struct{ first, charge float64 }
+// flow counts the charge through an edge: the mean current of the step, and in all.
+type flow struct{ passed, charge float64 }
 
 // runDown prepares a circuit to be left to itself from the given potentials. Ideal
 // connections are those given beside inductors, whose ringing is not followed.
@@ -67,12 +71,7 @@ func runDown(c *circuit.Circuit, from Voltages, given []tie) (*rundown, error) {
 	if len(from) != c.Nodes() {
 		panic("steady: potentials of another circuit")
 	}
-	for _, e := range c.Elements {
-		if e.Kind == circuit.Inductor {
-			given = append(given, tie{e.Name, e.From, e.To, 0})
-		}
-	}
-	net, err := reduce(c, given)
+	net, err := reduce(c, connections(c, given))
 	if err != nil {
 		return nil, err
 	}
@@ -84,6 +83,17 @@ func runDown(c *circuit.Circuit, from Voltages, given []tie) (*rundown, error) {
 	}
 	r.weave()
 	return r, nil
+}
+
+// connections are those given and the inductors.
+func connections(c *circuit.Circuit, given []tie) []tie {
+	all := slices.Clone(given)
+	for i := range c.Elements {
+		if e := &c.Elements[i]; e.Kind == circuit.Inductor {
+			all = append(all, tie{e.Name, e.From, e.To, 0})
+		}
+	}
+	return all
 }
 
 // add sorts an element in; gaps stay open, sinks are off.
@@ -143,21 +153,28 @@ type feed struct {
 	sum     []float64 // by joint, of all conductances there
 }
 
-// lay adds an edge that carries g·(voltage − emf).
-func (f *feed) lay(e *edge, g, emf float64) {
+// lay adds the conductance of an edge.
+func (f *feed) lay(e *edge, g float64) {
 	if e.slot == noSlot {
 		return
 	}
 	f.g[e.slot] += g
-	f.current[e.from] += g * (emf - e.offset)
-	f.current[e.to] -= g * (emf - e.offset)
 	f.sum[e.from] += g
 	f.sum[e.to] += g
 }
 
+// drive adds the current of an edge that carries g·(voltage − emf).
+func (f *feed) drive(e *edge, g, emf float64) {
+	if e.slot == noSlot {
+		return
+	}
+	i := g * (emf - e.offset)
+	f.current[e.from] += i
+	f.current[e.to] -= i
+}
+
 func (f *feed) clear() {
 	clear(f.g)
-	clear(f.current)
 	clear(f.sum)
 }
 
@@ -165,7 +182,7 @@ func (f *feed) clear() {
 func (r *rundown) highest() float64 {
 	most := 0.0
 	for i := range r.stores {
-		most = math.Max(most, math.Abs(r.stores[i].u))
+		most = max(most, math.Abs(r.stores[i].u))
 	}
 	return most
 }

@@ -32,17 +32,17 @@ func Short(c *circuit.Circuit, from Voltages, node string) (Delivered, error) {
 	}
 	unloaded := c.Each(func(e *circuit.Element) bool { return e.Role != circuit.Load })
 	sources := quiet(unloaded, true)
-	alone, err := runDown(unloaded, from, sources)
-	if err != nil {
-		return Delivered{}, err
-	}
-	group := alone.net.mates(n)
-	if group[circuit.Ground] {
-		return Delivered{}, nil
-	}
 	r, err := runDown(unloaded, from, append(sources, tie{"the short", n, circuit.Ground, 0}))
 	if err != nil {
 		return Delivered{}, err
+	}
+	alone, err := reduce(unloaded, connections(unloaded, sources))
+	if err != nil {
+		return Delivered{}, err
+	}
+	group := alone.mates(n)
+	if group[circuit.Ground] {
+		return Delivered{}, nil
 	}
 	r.diode = r.smallDiode()
 	return r.deliver(group)
@@ -90,7 +90,7 @@ func (r *rundown) deliver(group []bool) (Delivered, error) {
 	for i := range r.stores {
 		bring(&r.stores[i].edge, -r.stores[i].c*r.stores[i].u)
 	}
-	p := pace{tolerance: 5e-4, floor: 1e-3 * r.highest(), done: 1e-9 * r.highest()}
+	p := pace{tolerance: 2e-3, floor: 1e-3 * r.highest(), done: 1e-9 * r.highest()}
 	err := r.run(p, func(float64) {})
 	for i := range r.stores {
 		bring(&r.stores[i].edge, r.stores[i].c*r.stores[i].u)
@@ -104,5 +104,5 @@ func (r *rundown) deliver(group []bool) (Delivered, error) {
 	if charge == 0 {
 		return Delivered{Work: r.work}, err
 	}
-	return Delivered{magnitude(quantity.Charge(charge)), quantity.Energy(before - r.energy()), r.work}, err
+	return Delivered{magnitude(quantity.Charge(charge)), quantity.Energy(math.Max(0, before-r.energy())), r.work}, err
 }

@@ -6,15 +6,36 @@ import (
 	"kilovet/hv/lack"
 )
 
-// gamma makes the two stages of the step L-stable and of second order, both with
-// the same matrix: 1 − 1/√2 (R. Alexander, SIAM J. Numer. Anal. 14 (1977) 1006; memory).
-const gamma = 1 - math.Sqrt2/2
+// The step is the diagonally implicit method of three stages, L-stable and of third
+// order (R. Alexander, SIAM J. Numer. Anal. 14 (1977) 1006; memory, its order
+// conditions checked). All stages have the same matrix; the last is the end of the
+// step. The second difference of the slopes is what a method of second order would
+// be wrong by.
+const (
+	stages = 3
+	gamma  = 0.435866521508458999416019451193556
+)
 
-// Where the diodes have no resistance of their own, a conducting one conducts this
-// many times better than the best of what it ends on does within a step: ideal to a
-// part in ten thousand, and its voltage, whose sign tells whether it should conduct,
-// still stands clear of rounding.
-const idealDiode = 1e4
+// weights by stage: what the slopes of the stages before add to where it starts from.
+var weights = [stages][stages]float64{
+	{},
+	{(1 - gamma) / 2},
+	{(16*gamma - 6*gamma*gamma - 1) / 4, (6*gamma*gamma - 20*gamma + 5) / 4},
+}
+
+// share are the weights of the step.
+var share = [stages]float64{weights[2][0], weights[2][1], gamma}
+
+// Where the diodes have no resistance of their own, a conducting one conducts so many
+// times better than the best of what it ends on does within a step: ideal to less than
+// a step is wrong by, and its voltage, whose sign tells whether it should conduct,
+// still stands clear of rounding. Between the bounds it stays as it is, since its
+// voltage would move with it.
+const (
+	leastIdeal = 1e7
+	goodIdeal  = 3e8
+	mostIdeal  = 1e10
+)
 
 const (
 	firstStep = 1e-12 // s: shorter than any time constant of a chain
@@ -24,7 +45,7 @@ const (
 
 // pace says how closely a run is followed.
 type pace struct {
-	tolerance float64 // relative change of a capacitor's voltage left unexplained in a step
+	tolerance float64 // what a step of second order may be wrong by, relative; the step is far better
 	floor     float64 // V, below which a voltage need not be followed relatively
 	done      float64 // V: the run ends when no capacitor has more
 }
@@ -37,13 +58,13 @@ func (r *rundown) run(p pace, see func(t float64)) error {
 	for t, h := 0.0, firstStep; t < horizon && r.highest() > p.done; {
 		strain := r.step(h, p)
 		if strain > 1 && h > firstStep/growth {
-			h *= math.Max(0.2, 0.9/math.Sqrt(strain))
+			h *= math.Max(0.2, 0.9/math.Cbrt(strain))
 			continue
 		}
 		t += h
 		r.accept(h)
 		see(t)
-		h *= math.Min(growth, 0.9/math.Sqrt(math.Max(strain, 1e-3)))
+		h *= math.Min(growth, 0.9/math.Cbrt(math.Max(strain, 1e-3)))
 	}
 	if r.lost {
 		return lack.Failed("the diodes do not settle while the chain runs down")
@@ -55,11 +76,12 @@ func (r *rundown) run(p pace, see func(t float64)) error {
 // takes no time; a second time for what the diodes held back at first.
 func (r *rundown) jump() {
 	const instant = 1e-3 * firstStep
+	r.prepare(instant)
 	for range 2 {
 		for i := range r.stores {
 			r.stores[i].start = r.stores[i].u
 		}
-		r.settle(instant)
+		r.settle()
 		for i := range r.stores {
 			r.stores[i].u = r.over(&r.stores[i].edge)
 		}
@@ -67,27 +89,38 @@ func (r *rundown) jump() {
 	}
 }
 
-// step tries a step of length h. It reports the part of the change that a straight
-// line would not explain, in units of the tolerance.
+// step tries a step of length h. It reports its doubt in units of the tolerance.
 func (r *rundown) step(h float64, p pace) (strain float64) {
-	const again = (1 - gamma) / gamma
-	for i := range r.stores {
-		r.stores[i].start = r.stores[i].u
+	r.prepare(gamma * h)
+	for stage := range stages {
+		for i := range r.stores {
+			r.stores[i].begin(&weights[stage], stage)
+		}
+		r.settle()
+		for i := range r.stores {
+			s := &r.stores[i]
+			s.rise[stage] = (r.over(&s.edge) - s.start) / gamma
+		}
+		if stage == 0 {
+			r.eachFlow(func(f *flow, _ float64) { f.passed = 0 })
+		}
+		r.eachFlow(func(f *flow, current float64) { f.passed += share[stage] * current })
 	}
-	r.settle(gamma * h)
+	floor := max(p.floor, 1e-3*r.highest())
 	for i := range r.stores {
 		s := &r.stores[i]
-		s.start = s.u + again*(r.over(&s.edge)-s.u)
-	}
-	r.eachFlow(func(f *flow, current float64) { f.first = current })
-	r.settle(gamma * h)
-	floor := math.Max(p.floor, 1e-3*r.highest())
-	for i := range r.stores {
-		s := &r.stores[i]
-		end, straight := r.over(&s.edge), s.u+(s.start-s.u)/(1-gamma)
-		strain = math.Max(strain, math.Abs(end-straight)/(p.tolerance*(math.Abs(end)+floor)))
+		wrong := gamma * (s.rise[0] - 2*s.rise[1] + s.rise[2])
+		strain = max(strain, math.Abs(wrong)/(p.tolerance*(math.Abs(r.over(&s.edge))+floor)))
 	}
 	return strain
+}
+
+// begin is where a capacitor starts a stage from.
+func (s *store) begin(weights *[stages]float64, stage int) {
+	s.start = s.u
+	for j := range stage {
+		s.start += weights[j] * s.rise[j]
+	}
 }
 
 // accept makes the end of the step tried the present.
@@ -96,7 +129,7 @@ func (r *rundown) accept(h float64) {
 	for i := range r.stores {
 		r.stores[i].u = r.over(&r.stores[i].edge)
 	}
-	r.eachFlow(func(f *flow, current float64) { f.charge += h * ((1-gamma)*f.first + gamma*current) })
+	r.eachFlow(func(f *flow, _ float64) { f.charge += h * f.passed })
 }
 
 // eachFlow visits what charge can flow through, with the present current.
@@ -115,19 +148,34 @@ func (r *rundown) eachFlow(visit func(f *flow, current float64)) {
 	}
 }
 
-// settle finds the potentials a time h after the capacitors had their starting
-// voltages, by an implicit Euler stage, with every diode as its voltage asks.
-func (r *rundown) settle(h float64) {
+// prepare sets up the conductances of implicit Euler stages of length h.
+func (r *rundown) prepare(h float64) {
+	r.fresh = false
 	r.still.clear()
 	for i := range r.stores {
-		r.still.lay(&r.stores[i].edge, r.stores[i].c/h, r.stores[i].start)
+		s := &r.stores[i]
+		s.g = s.c / h
+		r.still.lay(&s.edge, s.g)
 	}
 	for i := range r.wires {
-		r.still.lay(&r.wires[i].edge, r.wires[i].g, 0)
+		r.still.lay(&r.wires[i].edge, r.wires[i].g)
 	}
-	r.gOn = idealDiode * r.still.best(r.valves)
 	if r.diode > 0 {
 		r.gOn = 1 / r.diode
+		return
+	}
+	r.gOn = r.still.ideal(r.valves, r.gOn)
+}
+
+// settle finds the potentials at the end of a stage from the capacitors' starting
+// voltages, with every diode as its voltage asks.
+func (r *rundown) settle() {
+	clear(r.still.current)
+	for i := range r.stores {
+		r.still.drive(&r.stores[i].edge, r.stores[i].g, r.stores[i].start)
+	}
+	for i := range r.wires {
+		r.still.drive(&r.wires[i].edge, r.wires[i].g, 0)
 	}
 	const tries = 200
 	for try := range tries {
@@ -135,23 +183,29 @@ func (r *rundown) settle(h float64) {
 		if !r.turn(try) {
 			return
 		}
+		r.fresh = false
 	}
 	r.lost = true
 }
 
-// best is the largest conductance at the ends of the diodes.
-func (f *feed) best(valves []valve) float64 {
+// ideal is the conductance of an ideal diode, as it was where that still serves.
+func (f *feed) ideal(valves []valve, was float64) float64 {
 	most := 0.0
 	for i := range valves {
-		for _, joint := range []int{valves[i].from, valves[i].to} {
+		for _, joint := range [2]int{valves[i].from, valves[i].to} {
 			if joint != 0 {
-				most = math.Max(most, f.sum[joint])
+				most = max(most, f.sum[joint])
 			}
 		}
 	}
-	return most
+	if was >= leastIdeal*most && was <= mostIdeal*most {
+		return was
+	}
+	return goodIdeal * most
 }
 
+// solve finds the potentials with the diodes as they are; the factors serve as long
+// as neither the step nor a diode changes.
 func (r *rundown) solve() {
 	copy(r.g, r.still.g)
 	copy(r.current, r.still.current)
@@ -163,9 +217,12 @@ func (r *rundown) solve() {
 			r.current[v.to] += r.gOn * v.offset
 		}
 	}
-	r.factors.factor(r.g)
+	if !r.fresh {
+		r.factors.factor(r.g)
+		r.fresh = true
+		r.work.Factorisations++
+	}
 	r.factors.solve(r.current, r.v)
-	r.work.Factorisations++
 }
 
 // turn switches the diodes that disagree with their voltage: all at once, and where
@@ -173,7 +230,7 @@ func (r *rundown) solve() {
 // taken, the more is put down to rounding.
 func (r *rundown) turn(try int) (turned bool) {
 	const patience = 20
-	noise := 1e-14 * math.Pow(10, float64(try/patience)) * r.topmost()
+	noise := 1e-15 * math.Pow(10, float64(try/patience)) * r.topmost()
 	for i := range r.valves {
 		v := &r.valves[i]
 		over := r.over(&v.edge)
@@ -191,7 +248,7 @@ func (r *rundown) turn(try int) (turned bool) {
 func (r *rundown) topmost() float64 {
 	most := 0.0
 	for _, v := range r.v {
-		most = math.Max(most, math.Abs(v))
+		most = max(most, math.Abs(v))
 	}
 	return most
 }

@@ -41,11 +41,14 @@ type kind struct{ name, begins string }
 var (
 	sheets  = kind{"PDF", "%PDF-"}
 	results = kind{"JSON of kilovet", `{"contract":`}
+	pages   = kind{"page of kilovet", "<!DOCTYPE html>\n<html lang=\"en\" data-made-by=\"kilovet\">"}
 )
 
 func kindOf(data []byte) kind {
-	if bytes.HasPrefix(data, []byte(sheets.begins)) {
-		return sheets
+	for _, k := range []kind{sheets, pages} {
+		if bytes.HasPrefix(data, []byte(k.begins)) {
+			return k
+		}
 	}
 	return results
 }

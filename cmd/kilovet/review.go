@@ -16,6 +16,7 @@ import (
 	"kilovet"
 	"kilovet/hv/chain"
 	"kilovet/reports/digest"
+	"kilovet/reports/html"
 	"kilovet/reports/json"
 	"kilovet/reports/page"
 	"kilovet/reports/pdf"
@@ -27,10 +28,11 @@ import (
 // reviewing is the flags of the command review.
 type reviewing struct {
 	world
-	pdf, json string
-	local     string
-	all       bool
-	require   []string
+	html, paper string
+	pdf, json   string
+	local       string
+	all         bool
+	require     []string
 
 	under *localLimits // once read
 }
@@ -48,6 +50,7 @@ func reviewCommand(w world) *cobra.Command {
 		},
 	}
 	flags := command.Flags()
+	r.sheetFlags(command)
 	flags.StringVar(&r.pdf, "pdf", "", "write the sheets to `FILE`")
 	flags.StringVar(&r.json, "json", "", "write the results as JSON to `FILE`; - is standard output, without the text")
 	localFlag(flags, &r.local)
@@ -61,6 +64,7 @@ const aboutReview = `Review a description: what will happen, judged by named rul
   kilovet review chain.toml                    one screen
   kilovet review --all chain.toml              every figure, finding and source
   kilovet review --pdf review.pdf chain.toml   sheets to read, file and sign
+  kilovet review --html page.html chain.toml   one page for the browser
   kilovet review --json - chain.toml           results for other programs
   kilovet review --local house.toml chain.toml under stricter limits of a local code
   kilovet review -                             a description on standard input
@@ -191,11 +195,18 @@ func (r *reviewing) render(review *rules.Review, note string) (outputs []output,
 		return nil, nil, defect(err)
 	}
 	if r.pdf != "" {
-		sheets, err := pdf.Render(page.New(review).Noted(note))
+		sheets, err := pdf.RenderOn(pdf.Paper(r.paper), page.New(review).Noted(note))
 		if err != nil {
 			return nil, nil, defect(err)
 		}
 		outputs = append(outputs, output{r.pdf, sheets})
+	}
+	if r.html != "" {
+		page, err := html.RenderWith(review, html.Options{Note: note})
+		if err != nil {
+			return nil, nil, defect(err)
+		}
+		outputs = append(outputs, output{r.html, page})
 	}
 	if r.json == "-" {
 		return outputs, data, nil
@@ -218,14 +229,20 @@ func (w world) manner(all bool) text.Options {
 // writable refuses outputs before anything is computed: sheets on standard output, and
 // what would take the place of something else.
 func (r *reviewing) writable(args []string) error {
-	if r.pdf == "-" {
-		return exitf(unusable, "sheets are not written to standard output; name a file, as in --pdf review.pdf")
+	if err := r.sheetsUsable(); err != nil {
+		return err
 	}
 	if err := r.distinct(args); err != nil {
 		return err
 	}
-	if r.pdf != "" {
-		if err := spares(r.pdf, sheets); err != nil {
+	for _, o := range []struct {
+		path string
+		kind kind
+	}{{r.pdf, sheets}, {r.html, pages}} {
+		if o.path == "" {
+			continue
+		}
+		if err := spares(o.path, o.kind); err != nil {
 			return err
 		}
 	}
@@ -237,7 +254,7 @@ func (r *reviewing) writable(args []string) error {
 
 // distinct refuses outputs that would overwrite each other or the description.
 func (r *reviewing) distinct(args []string) error {
-	paths := slices.DeleteFunc([]string{r.pdf, r.json}, func(p string) bool { return p == "" || p == "-" })
+	paths := slices.DeleteFunc([]string{r.pdf, r.html, r.json}, func(p string) bool { return p == "" || p == "-" })
 	if len(args) == 1 && args[0] != "-" {
 		paths = append(paths, args[0])
 	}

@@ -19,7 +19,7 @@ import (
 
 // Options say what a page holds beside the review.
 type Options struct {
-	Diagram *diagram.Diagram // the schematic; none where nil
+	Diagram *diagram.Diagram // the schematic, where it is not the review's own
 	Note    string           // stands before the title
 	// Version marks a page that is served: it reloads itself when the server's
 	// "changes" names another. Empty for a page in a file.
@@ -55,6 +55,8 @@ var (
 	style string
 	//go:embed filter.js
 	filter string
+	//go:embed light.js
+	light string
 	//go:embed live.js
 	live string
 )

@@ -10,6 +10,7 @@ import (
 
 	"kilovet/hv/document"
 	"kilovet/reports/digest"
+	"kilovet/reports/drawing"
 	"kilovet/reports/html"
 	"kilovet/reports/internal/sample"
 	"kilovet/rules"
@@ -173,6 +174,17 @@ func contents(r *rules.Review) []string {
 	for _, p := range r.PassedOver {
 		all = append(all, p.Rule, p.Because)
 	}
+	for _, c := range r.Curves {
+		all = append(all, c.Title, c.Subject, c.Note, c.Basis, drawing.CurveWords(c))
+	}
+	for _, t := range r.Tables {
+		all = append(all, t.Title, t.Subject, t.Note, t.Basis)
+		for _, row := range t.Rows {
+			for i, cell := range row {
+				all = append(all, t.Columns[i].Head, digest.Cell(t.Columns[i].Unit, cell.Value, cell.Text))
+			}
+		}
+	}
 	for _, in := range r.Inputs {
 		all = append(all, in.Role, in.Name, in.SHA256)
 	}
@@ -186,7 +198,7 @@ func TestForeignTextIsText(t *testing.T) {
 	d := small()
 	d.Marks[0].Subject, d.Ladder.Stages[0].Name = evil, evil
 	page := render(t, r, html.Options{Diagram: d, Note: evil})
-	if strings.Contains(page, "<img") || strings.Count(page, "<script>") != 1 {
+	if strings.Contains(page, "<img") || strings.Count(page, "<script>") != 2 {
 		t.Error("foreign text became markup")
 	}
 	if got := plain(page); strings.Count(got, `<script>alert("x")</script>`) < 4 {
@@ -204,6 +216,29 @@ func TestSchematicHasWordsAndLinks(t *testing.T) {
 	link := regexp.MustCompile(`<a href="#(finding-\d+)">rating\.cable</a>`).FindStringSubmatch(page[strings.Index(page, `class="marks"`):])
 	if link == nil || !strings.Contains(page, `id="`+link[1]+`" data-verdict="unassessed"`) {
 		t.Errorf("the mark leads to %v", link)
+	}
+}
+
+// What a finding speaks of can be found in the schematic by the same name.
+func TestFindingsNameTheirPartsInTheSchematic(t *testing.T) {
+	page := render(t, sample.Failing(), html.Options{Diagram: sample.Diagram(3)})
+	for _, want := range []string{`data-of="cable" aria-labelledby=`, `<g data-of="cable">`, `<a class="own" href="#finding-`, `<li data-of="` + sample.LongName + `">`} {
+		if !strings.Contains(page, want) {
+			t.Errorf("%q is missing", want)
+		}
+	}
+}
+
+// Curves and tables stand in their chapters, each drawing with words of its own.
+func TestChapters(t *testing.T) {
+	r := sample.Failing()
+	r.Curves, r.Tables = sample.Curves(), sample.Tables()
+	page := render(t, r, html.Options{})
+	for _, want := range []string{`<a href="#chapter-multiplier">Multiplier and supply</a>`, `<section id="chapter-multiplier"`, `<figure class="curve" id="curve-multiplier-1">`,
+		`aria-labelledby="curve-spacings-2-drawing-title curve-spacings-2-drawing-description"`, `<th scope="col" class="number">mean power</th>`, `<td class="number">1.234 mW</td>`, `<td>in the part</td>`} {
+		if !strings.Contains(page, want) {
+			t.Errorf("%q is missing", want)
+		}
 	}
 }
 

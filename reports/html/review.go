@@ -6,6 +6,7 @@ import (
 	"strings"
 
 	"kilovet/reports/digest"
+	"kilovet/reports/drawing"
 	"kilovet/rules"
 	"kilovet/rules/rule"
 )
@@ -27,7 +28,7 @@ type reviewed struct {
 	Schematic            *schematic
 	Verdicts, Concerns   []choice
 	Findings             []finding
-	Tables               []table
+	Chapters             []chapter
 	Assumptions          []string
 	Cautions, PassedOver []fact
 	Inputs               []rules.Input
@@ -41,6 +42,7 @@ type (
 		Verdict                     rule.Verdict
 		Concern                     rule.Concern
 		ID, Rule, Subjects, Because string
+		Of                          string // the first subject
 	}
 	choice struct {
 		Word  string
@@ -61,10 +63,10 @@ const mostSubjects = 3
 
 func reviewPage(r *rules.Review, o Options) (*reviewed, error) {
 	p := &reviewed{
-		shell:   newShell(clean(cmp.Or(r.Heading.Title, untitled)), "Review before first power-up", o, filter),
+		shell:   newShell(clean(cmp.Or(r.Heading.Title, untitled)), "Review before first power-up", o, filter, light),
 		Block:   block(r.Heading),
 		Verdict: r.Verdict, Sentence: clean(digest.Sentence(r)), Counts: digest.Counts(r.Counts), Deference: clean(r.Deference),
-		Findings: findings(r), Tables: tables(r),
+		Findings:    findings(r),
 		Assumptions: cleaned(r.Assumptions), Program: clean(strings.TrimSpace(r.Program.Name + " " + r.Program.Version)),
 	}
 	ids := idsOf(p.Findings)
@@ -85,10 +87,14 @@ func reviewPage(r *rules.Review, o Options) (*reviewed, error) {
 		p.Inputs = append(p.Inputs, rules.Input{Role: clean(in.Role), Name: clean(in.Name), SHA256: clean(in.SHA256)})
 	}
 	p.Verdicts, p.Concerns = choices(r)
-	var err error
-	p.Schematic, err = schematicOf(o.Diagram, ids)
+	pen, err := drawing.NewPen()
+	if err != nil {
+		return nil, err
+	}
+	p.Schematic = schematicOf(pen, cmp.Or(o.Diagram, r.Diagram), ids)
+	p.Chapters = chapters(pen, r)
 	p.Contents = p.contents()
-	return p, err
+	return p, nil
 }
 
 func clean(s string) string { return digest.Clean(s) }
@@ -155,7 +161,7 @@ func entries(list []rule.Finding, ids map[about]string) []entry {
 	var all []entry
 	for _, e := range digest.Entries(list) {
 		f := e.First
-		all = append(all, entry{f.Verdict, f.Concern, ids[about{clean(f.Rule), clean(f.Subject)}], clean(f.Rule), clean(e.Names(mostSubjects)), clean(f.Because)})
+		all = append(all, entry{f.Verdict, f.Concern, ids[about{clean(f.Rule), clean(f.Subject)}], clean(f.Rule), clean(e.Names(mostSubjects)), clean(f.Because), clean(f.Subject)})
 	}
 	return all
 }
@@ -186,8 +192,8 @@ func (p *reviewed) contents() []link {
 	}
 	add(p.Schematic != nil, "schematic", "Schematic")
 	add(len(p.Findings) > 0, "findings", "Findings")
-	for _, t := range p.Tables {
-		add(true, t.ID, t.Title)
+	for _, c := range p.Chapters {
+		add(true, c.ID, c.Title)
 	}
 	add(len(p.Assumptions) > 0, "assumptions", "Assumptions")
 	add(len(p.Cautions) > 0, "cautions", "Cautions")

@@ -26,13 +26,9 @@ type mark struct {
 type ruleLink struct{ ID, Name string }
 
 // schematicOf draws a diagram; nil where there is none.
-func schematicOf(d *diagram.Diagram, ids map[about]string) (*schematic, error) {
+func schematicOf(pen *drawing.Pen, d *diagram.Diagram, ids map[about]string) *schematic {
 	if d == nil {
-		return nil, nil
-	}
-	pen, err := drawing.NewPen()
-	if err != nil {
-		return nil, err
+		return nil
 	}
 	picture := pen.Schematic(d)
 	s := &schematic{
@@ -49,5 +45,5 @@ func schematicOf(d *diagram.Diagram, ids map[about]string) (*schematic, error) {
 	for _, p := range d.Parts() {
 		s.Parts = append(s.Parts, diagram.Part{Name: clean(p.Name), Kind: p.Kind, Value: clean(p.Value), From: clean(p.From), To: clean(p.To)})
 	}
-	return s, nil
+	return s
 }

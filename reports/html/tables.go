@@ -2,7 +2,7 @@ package html
 
 import (
 	"kilovet/reports/digest"
-	"kilovet/rules"
+	"kilovet/rules/figure"
 )
 
 // table is figures that share their columns.
@@ -12,15 +12,15 @@ type table struct {
 	Groups    []digest.Group
 }
 
-// tables are the figures that depend on the state, and the others.
-func tables(r *rules.Review) []table {
+// figureTables are the figures of a chapter that depend on the state, and the others.
+func figureTables(id string, figures []figure.Figure) []table {
 	var all []table
-	states := digest.States(r.Figures)
-	if groups := digest.ByState(r.Figures, states); len(groups) > 0 {
-		all = append(all, table{"figures-by-state", "Figures by state", cleaned(states), cleanGroups(groups)})
+	states := digest.States(figures)
+	if groups := digest.ByState(figures, states); len(groups) > 0 {
+		all = append(all, table{id + "-by-state", "Figures by state", cleaned(states), cleanGroups(groups)})
 	}
-	if groups := digest.Stateless(r.Figures); len(groups) > 0 {
-		all = append(all, table{"figures", "Figures", []string{"value"}, cleanGroups(groups)})
+	if groups := digest.Stateless(figures); len(groups) > 0 {
+		all = append(all, table{id + "-figures", "Figures", []string{"value"}, cleanGroups(groups)})
 	}
 	return all
 }

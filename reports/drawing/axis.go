@@ -143,19 +143,11 @@ func (a *scale) markLog(parts int) {
 			}
 			t := tick{value: v}
 			if (k-low)%each == 0 {
-				t.label = amount(v, a.Unit)
+				t.label = digest.Value(v, a.Unit)
 			}
 			a.ticks = append(a.ticks, t)
 		}
 	}
-}
-
-// amount writes a value in its unit.
-func amount(v float64, unit string) string {
-	if unit == "1" {
-		return quantity.Significant(v)
-	}
-	return digest.Amount(rule.Amount{Value: v, Unit: unit})
 }
 
 // entitled is what an axis shows and in which unit.

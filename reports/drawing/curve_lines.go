@@ -6,6 +6,7 @@ import (
 
 	"gonum.org/v1/plot/vg"
 
+	"kilovet/reports/digest"
 	"kilovet/rules/exhibit"
 )
 
@@ -110,7 +111,7 @@ func (s *sheet) leader(from, to at) {
 }
 
 func (p *plot) coordinates(q exhibit.Point) string {
-	return amount(q.Y, p.Y.Unit) + " at " + amount(q.X, p.X.Unit)
+	return digest.Value(q.Y, p.Y.Unit) + " at " + digest.Value(q.X, p.X.Unit)
 }
 
 // level draws a limit through the whole frame, its letter outside.
@@ -131,7 +132,7 @@ func (p *plot) level(i int, l exhibit.Level) {
 	if l.Along {
 		axis = p.X
 	}
-	p.key = append(p.key, entry{sample: sample, tag: tag, text: l.Name + ": " + amount(l.Value, axis.Unit)})
+	p.key = append(p.key, entry{sample: sample, tag: tag, text: l.Name + ": " + digest.Value(l.Value, axis.Unit)})
 }
 
 var levelTrace = trace{0.2, []float64{4, 0.6, 0.3, 0.6}}

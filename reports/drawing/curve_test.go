@@ -12,6 +12,7 @@ import (
 	"gonum.org/v1/plot/vg/recorder"
 	"pgregory.net/rapid"
 
+	"kilovet/reports/digest"
 	"kilovet/reports/internal/sample"
 	"kilovet/rules/exhibit"
 )
@@ -30,7 +31,7 @@ func TestCurveGolden(t *testing.T) {
 	pen := newPen(t)
 	for _, c := range sample.Curves()[:3] {
 		golden := "testdata/curve_" + c.ID + ".svg"
-		got := pen.Curve(c, mm(90)).SVG("curve", c.Title, CurveWords(c))
+		got := pen.Curve(c, mm(90)).SVG("curve", c.Title, digest.CurveWords(c))
 		if *update {
 			if err := os.WriteFile(golden, got, 0o644); err != nil {
 				t.Fatal(err)
@@ -194,14 +195,6 @@ func count(texts []string, want string) int {
 		}
 	}
 	return n
-}
-
-func TestCurveWords(t *testing.T) {
-	got := CurveWords(sample.Curves()[0])
-	want := "Voltage less its mean over time. Line multiplier: from 0 s to 40 µs, between -600 mV at 30 µs and 600 mV at 10 µs."
-	if !strings.HasPrefix(got, want) || !strings.HasSuffix(got, "Level allowed: 700 mV. Level diode stops conducting: 11 µs.") {
-		t.Errorf("got %s", got)
-	}
 }
 
 // What belongs to a part or node is known by its name, in the drawing and as a place.

@@ -47,7 +47,7 @@ func chapters(pen *drawing.Pen, r *rules.Review) []chapter {
 		out := chapter{ID: "chapter-" + string(c.Of), Title: c.Title, Figures: figureTables(string(c.Of), c.Figures)}
 		for i, given := range c.Curves {
 			id := fmt.Sprintf("curve-%s-%d", c.Of, i+1)
-			picture := pen.Curve(given, curveWidth).SVG(id+"-drawing", titled(given.Title, given.Subject), drawing.CurveWords(given))
+			picture := pen.Curve(given, curveWidth).SVG(id+"-drawing", titled(given.Title, given.Subject), digest.CurveWords(given))
 			out.Curves = append(out.Curves, curve{id, titled(given.Title, given.Subject), clean(given.Note), clean(given.Basis), template.HTML(picture)})
 		}
 		for i, given := range c.Tables {

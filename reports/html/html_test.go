@@ -10,7 +10,6 @@ import (
 
 	"kilovet/hv/document"
 	"kilovet/reports/digest"
-	"kilovet/reports/drawing"
 	"kilovet/reports/html"
 	"kilovet/reports/internal/sample"
 	"kilovet/rules"
@@ -175,7 +174,7 @@ func contents(r *rules.Review) []string {
 		all = append(all, p.Rule, p.Because)
 	}
 	for _, c := range r.Curves {
-		all = append(all, c.Title, c.Subject, c.Note, c.Basis, drawing.CurveWords(c))
+		all = append(all, c.Title, c.Subject, c.Note, c.Basis, digest.CurveWords(c))
 	}
 	for _, t := range r.Tables {
 		all = append(all, t.Title, t.Subject, t.Note, t.Basis)

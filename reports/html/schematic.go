@@ -3,6 +3,9 @@ package html
 import (
 	"html/template"
 
+	"gonum.org/v1/plot/vg"
+
+	"kilovet/reports/digest"
 	"kilovet/reports/drawing"
 	"kilovet/rules/diagram"
 	"kilovet/rules/rule"
@@ -16,6 +19,14 @@ type schematic struct {
 	Parts   []diagram.Part
 }
 
+// flags says what flags are, where there are any.
+func flags(d *diagram.Diagram) string {
+	if len(d.Marks) == 0 {
+		return ""
+	}
+	return " Flags bear the numbers of the list below; their outline tells the verdict."
+}
+
 type mark struct {
 	Number  int
 	Verdict rule.Verdict
@@ -25,15 +36,21 @@ type mark struct {
 
 type ruleLink struct{ ID, Name string }
 
+// The room of a schematic, about that of a screen.
+const (
+	wideRoom = 290 * vg.Millimeter
+	highRoom = 180 * vg.Millimeter
+)
+
 // schematicOf draws a diagram; nil where there is none.
 func schematicOf(pen *drawing.Pen, d *diagram.Diagram, ids map[about]string) *schematic {
 	if d == nil {
 		return nil
 	}
-	picture := pen.Schematic(d)
+	picture := pen.SchematicIn(d, wideRoom, highRoom)
 	s := &schematic{
 		Drawing: template.HTML(picture.SVG("drawing", "Schematic", drawing.Words(d))),
-		Caption: "Drawn from the description. Flags bear the numbers of the list below; their outline tells the verdict.",
+		Caption: digest.SchematicCaption(d) + flags(d),
 	}
 	for _, m := range d.Marks {
 		out := mark{m.Number, m.Verdict, clean(m.Subject), nil}

@@ -36,7 +36,7 @@ func (n *writer) schematic() []Block {
 	if d == nil {
 		return nil
 	}
-	f := Figure{Anchor: schematic, Label: n.labels[schematic], Diagram: d, Wide: true, Spots: map[string]string{}, Caption: schematicCaption(d)}
+	f := Figure{Anchor: schematic, Label: n.labels[schematic], Diagram: d, Wide: true, Spots: map[string]string{}, Caption: digest.SchematicCaption(d)}
 	for _, m := range d.Marks {
 		for _, p := range d.Parts() {
 			if p.Mark == m.Number {
@@ -50,21 +50,6 @@ func (n *writer) schematic() []Block {
 		blocks = append(blocks, n.flags(d))
 	}
 	return blocks
-}
-
-func schematicCaption(d *diagram.Diagram) string {
-	text := "Schematic, drawn from the description. Potentials are means to ground in the working state, in volts with SI prefixes."
-	if d.Unknown != "" {
-		text = "Schematic, drawn from the description. Potentials are not known: " + d.Unknown + "."
-	}
-	text += " Strays and leakage of clamps are not drawn."
-	switch {
-	case d.Elsewhere == 1:
-		text += " 1 finding speaks of what is not drawn here."
-	case d.Elsewhere > 1:
-		text += fmt.Sprintf(" %d findings speak of what is not drawn here.", d.Elsewhere)
-	}
-	return text
 }
 
 func (n *writer) markAnchor(m diagram.Mark) string {

@@ -17,6 +17,7 @@ func everything(w *writer, r *rules.Review) {
 		}
 	}
 	figures(w, r)
+	exhibits(w, r)
 	pairs(w, "Cautions", r.Cautions, func(c rule.Caution) (string, string) { return c.Subject, c.Text })
 	pairs(w, "Passed over", r.PassedOver, func(p rule.PassedOver) (string, string) { return p.Rule, p.Because })
 	pairs(w, "Assumptions", r.Assumptions, func(a string) (string, string) { return "", a })

@@ -1,0 +1,160 @@
+package text
+
+import (
+	"slices"
+	"strings"
+
+	"kilovet/reports/digest"
+	"kilovet/rules"
+	"kilovet/rules/exhibit"
+)
+
+// exhibits writes the tables of a review, and its curves in words.
+func exhibits(w *writer, r *rules.Review) {
+	if len(r.Tables) > 0 {
+		w.head("Tables")
+	}
+	for _, t := range r.Tables {
+		w.blank()
+		w.wrap(titled(t.Title, t.Subject))
+		newGrid(w, t).write()
+		w.remark(t.Note, t.Basis)
+	}
+	if len(r.Curves) == 0 {
+		return
+	}
+	w.head("Curves, drawn by --pdf and --html")
+	for _, c := range r.Curves {
+		w.hang("-", 2, titled(c.Title, c.Subject)+". "+digest.CurveWords(c)+" "+c.Note)
+		if c.Basis != "" {
+			w.hang("  by", 5, c.Basis)
+		}
+	}
+}
+
+func titled(title, subject string) string {
+	if subject == "" {
+		return title
+	}
+	return title + ", " + subject
+}
+
+// remark is what stands under a table.
+func (w *writer) remark(note, basis string) {
+	if note != "" {
+		w.hang("", 2, note)
+	}
+	if basis != "" {
+		w.hang("  by", 5, basis)
+	}
+}
+
+// grid sets a table with columns as wide as their texts, or narrower where the width
+// asks for it.
+type grid struct {
+	*writer
+	heads  []string
+	cells  [][]string
+	number []bool
+	widths []int
+}
+
+// between stands between two columns.
+const between = 2
+
+func newGrid(w *writer, t exhibit.Table) *grid {
+	g := &grid{writer: w}
+	for i, c := range t.Columns {
+		words := slices.ContainsFunc(t.Rows, func(row []exhibit.Cell) bool { return row[i].Value == nil && row[i].Text != "" })
+		g.heads, g.number = append(g.heads, digest.Clean(c.Head)), append(g.number, c.Unit != "" && !words)
+	}
+	for _, row := range t.Rows {
+		var cells []string
+		for i, c := range row {
+			cells = append(cells, digest.Clean(digest.Cell(t.Columns[i].Unit, c.Value, c.Text)))
+		}
+		g.cells = append(g.cells, cells)
+	}
+	g.widths = g.fitted()
+	return g
+}
+
+// leastColumn is how narrow a column may be made.
+const leastColumn = 8
+
+// fitted is the width of each column: what its longest text takes, the widest made
+// narrower until all fit; nil where they cannot.
+func (g *grid) fitted() []int {
+	widths := make([]int, len(g.heads))
+	sum := 2 + between*(len(widths)-1)
+	for i := range widths {
+		for _, row := range append(g.cells, g.heads) {
+			widths[i] = max(widths[i], runes(row[i]))
+		}
+		sum += widths[i]
+	}
+	for ; sum > g.width; sum-- {
+		widest := slices.Index(widths, slices.Max(widths))
+		if widths[widest] <= leastColumn {
+			return nil
+		}
+		widths[widest]--
+	}
+	return widths
+}
+
+func (g *grid) write() {
+	if g.widths == nil {
+		g.list()
+		return
+	}
+	g.row(g.heads)
+	for _, row := range g.cells {
+		g.row(row)
+	}
+}
+
+// row writes cells beside each other, each on as many lines as it takes.
+func (g *grid) row(cells []string) {
+	lines := make([][]string, len(cells))
+	most := 0
+	for i, c := range cells {
+		lines[i] = broken(c, g.widths[i])
+		most = max(most, len(lines[i]))
+	}
+	for n := range most {
+		var b strings.Builder
+		b.WriteString("  ")
+		for i := range cells {
+			b.WriteString(g.padded(i, at(lines[i], n)) + pad("", between))
+		}
+		g.line(b.String())
+	}
+}
+
+func at(lines []string, n int) string {
+	if n < len(lines) {
+		return lines[n]
+	}
+	return ""
+}
+
+// padded sets numbers to the right.
+func (g *grid) padded(column int, s string) string {
+	if g.number[column] {
+		return strings.Repeat(" ", g.widths[column]-runes(s)) + s
+	}
+	return pad(s, g.widths[column])
+}
+
+// list writes each row as lines of heading and text, where columns do not fit.
+func (g *grid) list() {
+	for _, row := range g.cells {
+		for i, c := range row {
+			if c != "" {
+				g.hang("  -", 4, g.heads[i]+": "+c)
+			}
+		}
+		g.blank()
+	}
+}

@@ -144,25 +144,13 @@ func reachOf(g gap.Gap, s gas.State) (shortest, longest float64) {
 	return shortest * (1 + 1e-9), longest * (1 - 1e-9)
 }
 
-// crossingOf finds where a rising function takes a value, on a logarithmic scale.
+// crossingOf finds where a rising function of a length takes a value.
 func crossingOf(lo, hi, want float64, f func(float64) (float64, error)) (quantity.Length, error) {
-	excess := func(u float64) (float64, error) {
-		y, err := f(lo * math.Exp(u-1))
-		return math.Log(y / want), err
-	}
-	top := 1 + math.Log(hi/lo)
-	for _, end := range []struct {
-		u    float64
-		even string
-	}{{1, "more"}, {top, "less"}} {
-		y, err := excess(end.u)
-		if err != nil {
-			return 0, err
-		}
-		if (y > 0) == (end.even == "more") && y != 0 {
-			return 0, lack.Range("even %s, the end of the law, gives %s than is asked for", quantity.Text(quantity.Length(lo*math.Exp(end.u-1))), end.even)
+	end := func(at float64, even string) func() error {
+		return func() error {
+			return lack.Range("even %s, the end of the law, gives %s than is asked for", quantity.Text(quantity.Length(at)), even)
 		}
 	}
-	u, err := solve.Rise(1, top, excess)
-	return quantity.Length(lo * math.Exp(u-1)), err
+	x, err := solve.Level(lo, hi, want, f, end(lo, "more"), end(hi, "less"))
+	return quantity.Length(x), err
 }

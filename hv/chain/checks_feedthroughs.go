@@ -111,8 +111,15 @@ func (s *survey) feedthroughSurfaces(f *Feedthrough) {
 	if v := f.VacuumSide; v != nil {
 		s.tested(v.TestedVoltage, v.TestedLength)
 	}
-	if sl := f.Sleeve; sl != nil && s.sound(sl.TestedThickness.Place) && s.lacks(sl.Strength.Place) {
-		s.fault(sl.TestedThickness.Place, "a tested thickness without the strength", `give strength, as in strength = "15 kV/mm"`)
+	if sl := f.Sleeve; sl != nil {
+		s.strengthOf(sl.Strength, sl.TestedThickness)
+	}
+}
+
+// strengthOf asks for the strength beside its thickness.
+func (s *survey) strengthOf(strength document.Given[quantity.Field], thickness document.Given[quantity.Length]) {
+	if s.sound(thickness.Place) && s.lacks(strength.Place) {
+		s.fault(thickness.Place, "a tested thickness without the strength", `give strength, as in strength = "15 kV/mm"`)
 	}
 }
 

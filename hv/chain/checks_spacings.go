@@ -14,7 +14,11 @@ func lineOf(p document.Place) string { return strconv.Itoa(p.Line) }
 // checkSpacings asks of each spacing for two nodes or a voltage, not both.
 func checkSpacings(s *survey) {
 	for i := range s.Spacings {
-		s.spacingEnds(&s.Spacings[i])
+		sp := &s.Spacings[i]
+		s.spacingEnds(sp)
+		s.tested(sp.TestedVoltage, sp.TestedLength)
+		s.strengthOf(sp.Strength, sp.TestedThickness)
+		s.spacingMedium(sp)
 	}
 }
 
@@ -36,6 +40,24 @@ func (s *survey) spacingEnds(sp *Spacing) {
 		s.fault(sp.From.Place, "without a multiplier nothing tells the voltage between two nodes", `give voltage in place of from and to, as in voltage = "20 kV"`)
 	case from && sp.From.V == sp.To.V && s.sound(sp.To.Place):
 		s.fault(sp.To.Place, "both sides on the same node", "name the node of the other side")
+	}
+}
+
+// spacingMedium reports keys that another medium has.
+func (s *survey) spacingMedium(sp *Spacing) {
+	if !s.sound(sp.Medium.Place) {
+		return
+	}
+	for _, k := range []struct {
+		leaf   document.Leaf
+		medium string
+	}{
+		{sp.Board, "printed board"}, {sp.Finish, "vacuum"}, {sp.Conditioned, "vacuum"}, {sp.StressedArea, "vacuum"}, {sp.JunctionAngle, "vacuum"},
+		{sp.Shielded, "vacuum"}, {sp.Strength, "solid"}, {sp.OilTest, "oil"},
+	} {
+		if k.leaf.Set() && sp.Medium.V != k.medium {
+			s.fault(k.leaf.Here(), "a key of spacings in "+k.medium+", not in "+sp.Medium.V, "leave it out, or correct the medium")
+		}
 	}
 }
 

@@ -28,6 +28,8 @@ var draftOn = []string{"format", "title", "site", "drive", "multiplier", "load",
 var draftOther = []string{
 	"drive.unbalance", "load.resistance", "bias.voltage", "spacing.voltage", "field.electrodes.voltage",
 	"spacing.shape.radius", "spacing.shape.tip_radius", "spacing.shape.edge_radius", "spacing.shape.earthed",
+	"spacing.board", "spacing.finish", "spacing.conditioned", "spacing.stressed_area", "spacing.junction_angle", "spacing.shielded",
+	"spacing.strength", "spacing.tested_thickness", "spacing.oil_test",
 	"feedthrough.voltage",
 	"feedthrough.air_side.shape.radius", "feedthrough.air_side.shape.tip_radius", "feedthrough.air_side.shape.edge_radius", "feedthrough.air_side.shape.earthed",
 	"feedthrough.vacuum_side.shape.radius", "feedthrough.vacuum_side.shape.tip_radius", "feedthrough.vacuum_side.shape.edge_radius", "feedthrough.vacuum_side.shape.earthed",
@@ -40,6 +42,7 @@ var draftRare = []string{
 	"load.permanent",
 	"multiplier.coupling_capacitor.value_at_voltage", "multiplier.smoothing_capacitor.value_at_voltage",
 	"spacing.also", "spacing.cti", "spacing.gas", "spacing.pressure", "spacing.temperature", "spacing.humidity", "spacing.gauge_factor", "spacing.impulse_tested",
+	"spacing.ribs", "spacing.ribs.count", "spacing.ribs.depth", "spacing.ribs.width", "spacing.electrode_surface", "spacing.tested_voltage", "spacing.tested_length",
 }
 
 func draftOff(path string) bool {

@@ -418,6 +418,9 @@ name = "f"
 voltage = "20 kV"
 also = ["stage.1"]     # FAULT 8 spacing: spacing.also: further nodes to a spacing that is between none
 medium = "solid"
+finish = "polished"    # FAULT 10 spacing: spacing.finish: a key of spacings in vacuum, not in solid; leave it out
+tested_voltage = "3 kV" # FAULT 18 spacing: spacing.tested_voltage: a tested voltage without the tested length
+tested_thickness = "3 mm" # FAULT 20 spacing: spacing.tested_thickness: a tested thickness without the strength
 `,
 	"shapes": `format = 1
 [[spacing]]

@@ -117,6 +117,22 @@ type Spacing struct {
 	Humidity      document.Given[quantity.Humidity]    `key:"humidity" range:">= 0 g/m3, <= 60 g/m3" means:"absolute humidity" example:"11 g/m3"`
 	GaugeFactor   document.Given[float64]              `key:"gauge_factor" range:"> 0, <= 100" means:"true pressure over gauge reading" example:"1.0"`
 	ImpulseTested document.Given[bool]                 `key:"impulse_tested" means:"an impulse voltage test was done" example:"false"`
+
+	Ribs             *Ribs                            `key:"ribs" means:"ribs across the surface; the creepage is measured over them"`
+	Board            document.Given[string]           `key:"board" words:"external uncoated | internal | polymer coated | conformal coated | termination bare | termination coated" means:"printed board: where the conductors lie (default: external uncoated)" example:"conformal coated"`
+	ElectrodeSurface document.Given[string]           `key:"electrode_surface" words:"smooth | weathered | stranded" means:"air and gas: surface of the electrodes (default: smooth)" example:"smooth"`
+	Finish           document.Given[string]           `key:"finish" words:"machined | polished" means:"vacuum: finish of the electrodes" example:"polished"`
+	Conditioned      document.Given[bool]             `key:"conditioned" means:"vacuum: the electrodes were conditioned above their working voltage" example:"true"`
+	StressedArea     document.Given[quantity.Area]    `key:"stressed_area" range:"> 0 mm2, <= 100 m2" means:"vacuum: area of electrode above 90 % of the peak field" example:"80 mm2"`
+	JunctionAngle    document.Given[quantity.Angle]   `key:"junction_angle" range:"> 0 deg, < 180 deg" means:"vacuum: angle inside the insulator between its surface and the negative electrode" example:"45 deg"`
+	Shielded         document.Given[bool]             `key:"shielded" means:"vacuum: a shield covers the junction at the negative electrode" example:"true"`
+	TestedVoltage    document.Given[quantity.Voltage] `key:"tested_voltage" range:"> 0 V, <= 1 MV" means:"flashover voltage of a like surface in the same medium, at tested_length" example:"45 kV"`
+	TestedLength     document.Given[quantity.Length]  `key:"tested_length" range:">= 1 mm, <= 300 mm" means:"length of the surface that was tested" example:"30 mm"`
+	Strength         document.Given[quantity.Field]   `key:"strength" range:"> 0 kV/mm, <= 1000 kV/mm" means:"solid: short-time strength of the maker, at tested_thickness" example:"15 kV/mm"`
+	TestedThickness  document.Given[quantity.Length]  `key:"tested_thickness" range:"> 0 mm, <= 1 m" means:"solid: thickness that the strength was measured at" example:"3 mm"`
+	OilTest          document.Given[quantity.Voltage] `key:"oil_test" range:"> 0 V, <= 200 kV" means:"oil: mean breakdown voltage over 2.5 mm in the standard test, rms" example:"60 kV"`
+
+	Of *Feedthrough // the feedthrough it was derived from; nil where it was described
 }
 
 // Shape is the shape of the electrodes on both sides of a gap.

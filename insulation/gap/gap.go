@@ -28,6 +28,27 @@ type Gap struct {
 
 	Mains         *Mains // nil: no mains transients reach the gap
 	ImpulseTested bool   // an impulse voltage test of this gap was passed
+
+	Polished     *bool         // vacuum: electrodes polished, not only machined; nil: not said
+	Conditioned  *bool         // vacuum: electrodes conditioned; nil: not said
+	StressedArea quantity.Area // vacuum: above 90 % of the peak field
+	Tested       Tested        // a like surface in the same medium
+	Strength     quantity.Field
+	Specimen     quantity.Length  // that Strength was measured at
+	OilTest      quantity.Voltage // oil: mean of the standard test, rms
+	Ribs         Ribs             // across the surface, which Creepage is measured over
+}
+
+// Tested is a flashover voltage that a surface was found to have, and its length.
+type Tested struct {
+	Voltage quantity.Voltage
+	Length  quantity.Length
+}
+
+// Ribs are like ribs across a surface.
+type Ribs struct {
+	Count        int
+	Depth, Width quantity.Length // height of a rib; clear width of the grooves between
 }
 
 // Mains is the supply whose transients reach a gap.

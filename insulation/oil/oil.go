@@ -4,8 +4,6 @@
 package oil
 
 import (
-	"math"
-
 	"kilovet/hv/lack"
 	"kilovet/hv/quantity"
 	"kilovet/insulation/gap"
@@ -37,25 +35,13 @@ func gapWhere(g gap.Gap, closest, widest quantity.Length, want quantity.Voltage,
 	if g.Shape != nil {
 		closest = max(closest, 1.0001e-4*g.Shape.Sharpest()) // closer spheres are plates
 	}
-	place := func(u float64) quantity.Length { return closest * quantity.Length(math.Exp(u-1)) }
-	excess := func(u float64) (float64, error) {
-		v, err := of(withGap(g, place(u)))
-		return math.Log(float64(v / want)), err
-	}
-	most := 1 + math.Log(float64(widest/closest))
-	low, err := excess(1)
-	if err != nil {
-		return 0, err
-	}
-	high, err := excess(most)
-	switch {
-	case err != nil:
-		return 0, err
-	case low > 0:
-		return 0, lack.Range("even %s of oil, the closest that is known, stands more than %s", quantity.Text(closest), quantity.Text(want))
-	case high < 0:
-		return 0, lack.Range("even %s of oil, the widest that is known, stands less than %s", quantity.Text(widest), quantity.Text(want))
-	}
-	u, err := solve.Rise(1, most, excess)
-	return place(u), err
+	x, err := solve.Level(float64(closest), float64(widest), float64(want), func(d float64) (float64, error) {
+		v, err := of(withGap(g, quantity.Length(d)))
+		return float64(v), err
+	}, func() error {
+		return lack.Range("even %s of oil, the closest that is known, stands more than %s", quantity.Text(closest), quantity.Text(want))
+	}, func() error {
+		return lack.Range("even %s of oil, the widest that is known, stands less than %s", quantity.Text(widest), quantity.Text(want))
+	})
+	return quantity.Length(x), err
 }

@@ -54,6 +54,29 @@ func Find(name string) (Material, error) {
 	return Material{}, lack.Range("no strength of %s is known here", name)
 }
 
+// steepest is the fastest fall of strength with thickness among the known materials, for
+// those whose own is not known.
+var steepest = span(0.42, 0.42, remember("E ~ t^-0.42, the steepest of the known materials"))
+
+// Of is the material of a part: the one of its name, with the strength and specimen that
+// were given for it in place of the printed ones. A name that is not known needs a
+// strength.
+func Of(g gap.Gap) (Material, error) {
+	m, err := Find(g.Material)
+	if g.Strength <= 0 {
+		return m, err
+	}
+	if err != nil {
+		m = Material{Name: g.Material, Exponent: steepest}
+		if m.Name == "" {
+			m.Name = "the solid"
+		}
+	}
+	m.Strength = Span[quantity.Field]{Least: g.Strength, Most: g.Strength, Source: read("strength given in the description")}
+	m.Tested, m.Thinnest, m.Thickest, m.Others, m.Caveats = g.Specimen, 0, 0, nil, nil
+	return m, nil
+}
+
 // Materials are all that are known, by name.
 func Materials() []Material { return slices.Clone(materials) }
 

@@ -1,116 +1,90 @@
 package solid
 
 import (
+	"math"
+
 	"kilovet/hv/lack"
 	"kilovet/hv/quantity"
-	"kilovet/insulation/gap"
-	"kilovet/insulation/gas"
-	"kilovet/insulation/shape"
-	"kilovet/insulation/vacuum"
 )
 
-// Sleeve is a conductor through an insulating sleeve whose outside is earthed, with an
-// annulus of gas or vacuum between conductor and bore.
+// Sleeve is a conductor through an insulating sleeve in the hole of an earthed plate,
+// with an annulus of gas or vacuum within the sleeve, around it, or both.
 type Sleeve struct {
 	Conductor    quantity.Length // radius
 	Bore         quantity.Length // inner radius of the sleeve
-	Outside      quantity.Length // its outer radius, at the earthed metal
+	Outside      quantity.Length // its outer radius
+	Hole         quantity.Length // radius of the hole; zero: the sleeve fills it
 	Permittivity float64         // of the sleeve
+	Resistivity  quantity.Resistivity
 }
 
-// Annulus is what the annulus of a sleeve takes.
-type Annulus struct {
-	Voltage quantity.Voltage
-	Field   quantity.Field // at the conductor
+// Inner is the annulus between conductor and bore.
+func (s Sleeve) Inner() Slit { return Slit{sleeve: s, From: s.Conductor, To: s.Bore} }
+
+// Outer is the annulus between sleeve and hole.
+func (s Sleeve) Outer() Slit { return Slit{sleeve: s, From: s.Outside, To: s.hole()} }
+
+func (s Sleeve) hole() quantity.Length {
+	if s.Hole == 0 {
+		return s.Outside
+	}
+	return s.Hole
 }
 
-// Annulus is what the annulus takes of a voltage on the conductor. Switched: most of it,
-// as its permittivity is 1. Settled: all of it, since no sleeve insulates as a dry gas or
-// a vacuum does.
-func (s Sleeve) Annulus(v quantity.Voltage, how Sharing) (Annulus, error) {
-	share, err := s.share(how)
-	if err != nil {
-		return Annulus{}, err
+// complete refuses radii that do not grow; an annulus may be closed.
+func (s Sleeve) complete() error {
+	if !(s.Conductor > 0 && s.Bore >= s.Conductor && s.Outside > s.Bore && s.hole() >= s.Outside) {
+		return lack.Because("conductor, bore, outside of the sleeve and hole are not growing radii")
 	}
-	l, err := s.line()
-	if err != nil {
-		return Annulus{}, err
-	}
-	u := v * quantity.Voltage(share)
-	return Annulus{Voltage: u, Field: l.Peak(u)}, nil
+	return nil
 }
 
-func (s Sleeve) share(how Sharing) (quantity.Fraction, error) {
-	if !(s.Conductor > 0 && s.Bore > s.Conductor && s.Outside > s.Bore) {
-		return 0, lack.Because("conductor, bore and outside of the sleeve are not three growing radii")
+// open are the logarithms of the radii of both annuli, zero where one is closed, and
+// that of the sleeve.
+func (s Sleeve) extents() (inner, wall, outer float64) {
+	return math.Log(float64(s.Bore / s.Conductor)), math.Log(float64(s.Outside / s.Bore)), math.Log(float64(s.hole() / s.Outside))
+}
+
+// Shares are the parts of the voltage on inner annulus, sleeve and outer annulus.
+// Switched, by permittivity: most on the annuli, whose own is 1. Settled: nothing on the
+// sleeve, since none insulates as a dry gas or a vacuum does; its charges wander until
+// its field is gone, and as none leave it the annuli share as capacitors in series.
+// Without an annulus all is on the sleeve.
+func (s Sleeve) Shares(how Sharing) (inner, wall, outer quantity.Fraction, err error) {
+	if err := s.complete(); err != nil {
+		return 0, 0, 0, err
 	}
-	if how == Settled {
-		return 1, nil
+	a, w, b := s.extents()
+	closed := a+b == 0
+	switch {
+	case closed:
+		return 0, 1, 0, nil
+	case how == Settled:
+		w = 0
+	case s.Permittivity < 1:
+		return 0, 0, 0, lack.Because("the relative permittivity of the sleeve is not given, 1 or more")
+	default:
+		w /= s.Permittivity
 	}
-	w := Wall{InnerRadius: s.Conductor, Layers: []Layer{
-		{Thickness: s.Bore - s.Conductor, Permittivity: 1},
-		{Thickness: s.Outside - s.Bore, Permittivity: s.Permittivity},
-	}}
-	u, err := w.Voltages(1, Switched)
-	if err != nil {
+	sum := a + w + b
+	return quantity.Fraction(a / sum), quantity.Fraction(w / sum), quantity.Fraction(b / sum), nil // electrostatics
+}
+
+// Settling is the time constant with which the voltage leaves the sleeve for its annuli,
+// (C + C₁)/G, C₁ the annuli in series: ρ ε₀ (ε + ln(sleeve)/ln(annuli)). Without an
+// annulus nothing moves, a lack.
+func (s Sleeve) Settling() (quantity.Time, error) {
+	if err := s.complete(); err != nil {
 		return 0, err
 	}
-	return quantity.Fraction(u[0]), nil
-}
-
-// line is the critical line of the annulus alone.
-func (s Sleeve) line() (shape.Line, error) {
-	return shape.Of(gap.Shape{Kind: gap.Coaxial, InnerRadius: s.Conductor, OuterRadius: s.Bore}, 0)
-}
-
-// SparksInGas is the peak voltage on the conductor at which the annulus begins to spark
-// in a gas. The sleeve holds the arc off, each spark is a partial discharge that eats it.
-func (s Sleeve) SparksInGas(state gas.State, how Sharing) (gap.Answer[quantity.Voltage], error) {
-	l, err := s.line()
-	if err != nil {
-		return gap.Answer[quantity.Voltage]{}, err
+	a, w, b := s.extents()
+	switch {
+	case a+b == 0:
+		return 0, lack.Range("a sleeve without an annulus has one layer only")
+	case s.Permittivity < 1:
+		return 0, lack.Because("the relative permittivity of the sleeve is not given, 1 or more")
+	case s.Resistivity <= 0:
+		return 0, lack.Because("the resistivity of the sleeve is not given: when DC settles is not known")
 	}
-	starts, err := gas.Onset(state, l, gap.Smooth)
-	if err != nil {
-		starts, err = thin(state, l)
-	}
-	return s.onConductor(starts, err, how)
-}
-
-// thin is the onset of an annulus under the reach of the streamer criterion, or of another
-// gas: the field at the conductor reaches the mean one at which plates that far apart
-// break down.
-func thin(state gas.State, l shape.Line) (gap.Answer[quantity.Voltage], error) {
-	a, err := gas.UniformBreakdown(state, l.Gap())
-	a.Value *= quantity.Voltage(l.Utilisation())
-	a.Because += ", at the field of the conductor"
-	return a, err
-}
-
-// EmitsInVacuum is the voltage on the conductor at which the annulus, in vacuum, begins to
-// emit or breaks down.
-func (s Sleeve) EmitsInVacuum(how Sharing) (gap.Answer[quantity.Voltage], error) {
-	starts, err := vacuum.Onset(gap.Gap{
-		Medium: gap.Vacuum, Shape: &gap.Shape{Kind: gap.Coaxial, InnerRadius: s.Conductor, OuterRadius: s.Bore},
-	})
-	return s.onConductor(starts, err, how)
-}
-
-// onConductor turns an onset across the annulus into one on the conductor.
-func (s Sleeve) onConductor(a gap.Answer[quantity.Voltage], err error, how Sharing) (gap.Answer[quantity.Voltage], error) {
-	if err != nil {
-		return gap.Answer[quantity.Voltage]{}, err
-	}
-	share, err := s.share(how)
-	if err != nil {
-		return gap.Answer[quantity.Voltage]{}, err
-	}
-	a.Value /= quantity.Voltage(share)
-	for i := range a.Shown {
-		a.Shown[i].Value /= quantity.Voltage(share)
-	}
-	if how == Settled {
-		a.Assumptions = append(a.Assumptions, "the annulus takes the whole voltage once DC has settled")
-	}
-	return a, nil
+	return quantity.Time(float64(s.Resistivity) * vacuumPermittivity * (s.Permittivity + w/(a+b))), nil // Maxwell and Wagner
 }

@@ -8,8 +8,6 @@
 package solid
 
 import (
-	"math"
-
 	"kilovet/hv/lack"
 	"kilovet/hv/quantity"
 	"kilovet/insulation/gap"
@@ -33,25 +31,13 @@ func withThickness(g gap.Gap, t quantity.Length) gap.Gap {
 // thicknessWhere finds the thickness between two at which a voltage that rises with it
 // takes a value. What the thickest does not reach and the thinnest exceeds is a lack.
 func thicknessWhere(thin, thick quantity.Length, want quantity.Voltage, of func(quantity.Length) (quantity.Voltage, error)) (quantity.Length, error) {
-	place := func(u float64) quantity.Length { return thin * quantity.Length(math.Exp(u-1)) }
-	excess := func(u float64) (float64, error) {
-		v, err := of(place(u))
-		return math.Log(float64(v / want)), err
-	}
-	most := 1 + math.Log(float64(thick/thin))
-	low, err := excess(1)
-	if err != nil {
-		return 0, err
-	}
-	high, err := excess(most)
-	switch {
-	case err != nil:
-		return 0, err
-	case low > 0:
-		return 0, lack.Range("even %s, the thinnest that is known, stands more than %s", quantity.Text(thin), quantity.Text(want))
-	case high < 0:
-		return 0, lack.Range("even %s, the thickest that is known, stands less than %s", quantity.Text(thick), quantity.Text(want))
-	}
-	u, err := solve.Rise(1, most, excess)
-	return place(u), err
+	x, err := solve.Level(float64(thin), float64(thick), float64(want), func(t float64) (float64, error) {
+		v, err := of(quantity.Length(t))
+		return float64(v), err
+	}, func() error {
+		return lack.Range("even %s, the thinnest that is known, stands more than %s", quantity.Text(thin), quantity.Text(want))
+	}, func() error {
+		return lack.Range("even %s, the thickest that is known, stands less than %s", quantity.Text(thick), quantity.Text(want))
+	})
+	return quantity.Length(x), err
 }

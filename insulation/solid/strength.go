@@ -99,7 +99,7 @@ func (m Material) floor() quantity.Length {
 // edges that stick into the solid, age and heat are not in it.
 func Breakdown(g gap.Gap) (gap.Answer[quantity.Voltage], error) {
 	none := gap.Answer[quantity.Voltage]{}
-	m, err := Find(g.Material)
+	m, err := Of(g)
 	if err != nil {
 		return none, err
 	}
@@ -175,7 +175,7 @@ func lineOf(g gap.Gap) (shape.Line, []string, error) {
 // ThicknessForBreakdown is the thickness whose breakdown is at a voltage, sharpest radius
 // kept.
 func ThicknessForBreakdown(g gap.Gap, v quantity.Voltage) (quantity.Length, error) {
-	m, err := Find(g.Material)
+	m, err := Of(g)
 	if err != nil {
 		return 0, err
 	}

@@ -86,7 +86,7 @@ func ClearanceNeeded(g gap.Gap, v gap.Voltages) (gap.Answer[quantity.Length], er
 
 // atLeastThinnest is the thickness for a voltage, or the thinnest where that stands more.
 func atLeastThinnest(g gap.Gap, v quantity.Voltage, s Share) (quantity.Length, error) {
-	m, err := Find(g.Material)
+	m, err := Of(g)
 	if err != nil {
 		return 0, err
 	}

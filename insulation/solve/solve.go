@@ -17,6 +17,37 @@ const (
 // point is a place and the value of the function there.
 type point struct{ x, y float64 }
 
+// Level is the x between lo and hi, both positive, at which a positive rising function
+// takes a value, searched on logarithmic scales. A value under that at lo or above that
+// at hi is given back as the error that low or high makes; an error of f ends the search.
+func Level(lo, hi, want float64, f func(float64) (float64, error), low, high func() error) (float64, error) {
+	place := func(u float64) float64 { return lo * math.Exp(u-1) } // u from 1: Rise wants no zero
+	excess := func(u float64) (float64, error) {
+		y, err := f(place(u))
+		return math.Log(y / want), err
+	}
+	top := 1 + math.Log(hi/lo)
+	least, err := excess(1)
+	if err != nil {
+		return 0, err
+	}
+	most, err := excess(top)
+	switch {
+	case err != nil:
+		return 0, err
+	case math.Abs(least) <= tolerance:
+		return lo, nil
+	case math.Abs(most) <= tolerance:
+		return hi, nil
+	case least > 0:
+		return 0, low()
+	case most < 0:
+		return 0, high()
+	}
+	u, err := Rise(1, top, excess)
+	return place(u), err
+}
+
 // Rise is the x between lo and hi, both positive, at which the continuous rising
 // function f crosses zero, to 1e-12 of x. A function that has one sign at both ends
 // has no crossing there: the programmer's fault. An error of f ends the search.

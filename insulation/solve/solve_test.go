@@ -61,3 +61,25 @@ func TestAboveDoublesAndGivesUp(t *testing.T) {
 		t.Errorf("past the limit: %v", err)
 	}
 }
+
+func TestLevelFindsAValueOrSaysWhichEndFallsShort(t *testing.T) {
+	low, high := errors.New("low"), errors.New("high")
+	at := func(want float64) (float64, error) {
+		return solve.Level(1e-5, 10, want, func(x float64) (float64, error) { return 7 * math.Sqrt(x), nil }, func() error { return low }, func() error { return high })
+	}
+	for _, x := range []float64{1e-5, 3e-4, 0.2, 10} {
+		if got, err := at(7 * math.Sqrt(x)); err != nil || math.Abs(got/x-1) > 1e-9 {
+			t.Errorf("%g came back as %g (%v)", x, got, err)
+		}
+	}
+	if _, err := at(1e-3); !errors.Is(err, low) {
+		t.Errorf("under the lower end: %v", err)
+	}
+	if _, err := at(100); !errors.Is(err, high) {
+		t.Errorf("above the upper end: %v", err)
+	}
+	broken := errors.New("broken")
+	if _, err := solve.Level(1, 2, 1, func(float64) (float64, error) { return 0, broken }, nil, nil); !errors.Is(err, broken) {
+		t.Errorf("Level returned %v", err)
+	}
+}

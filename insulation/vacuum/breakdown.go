@@ -43,13 +43,16 @@ func PlaneBreakdown(d quantity.Length) (gap.Answer[quantity.Voltage], error) {
 // the field at the electrode (V E ≤ C² and E ≤ 40 kV/mm), so a gap with a utilisation
 // factor η stands what plates at η d stand. The higher of the two electrodes' fields is
 // taken, whatever the polarity: the cathode emits, the anode was seen to decide too.
-// Without a shape there is a lack, PlaneBreakdown bounds what it could be.
+// Electrodes that are not known to be polished and conditioned stand half, and an area
+// under stress above a square centimetre takes its part. Without a shape there is a
+// lack, PlaneBreakdown bounds what it could be.
 func Breakdown(g gap.Gap) (gap.Answer[quantity.Voltage], error) {
 	x, err := even(g)
 	if err != nil {
 		return gap.Answer[quantity.Voltage]{}, err
 	}
-	return law(x), nil
+	s, err := stateOf(g)
+	return s.applied(law(x)), err
 }
 
 // law joins the two laws over the even length of a gap.
@@ -69,7 +72,11 @@ func law(x quantity.Length) gap.Answer[quantity.Voltage] {
 
 // ClearanceForBreakdown is the gap whose breakdown is at a voltage, sharpest radius kept.
 func ClearanceForBreakdown(g gap.Gap, v quantity.Voltage) (quantity.Length, error) {
-	return gapOf(g, evenAt(v))
+	s, err := stateOf(g)
+	if err != nil {
+		return 0, err
+	}
+	return gapOf(g, evenAt(v/s.factor()))
 }
 
 // evenAt is the even length at which the joined law gives a voltage.

@@ -80,7 +80,7 @@ func TestOnsetNeverExceedsBreakdownAndInverts(t *testing.T) {
 
 func TestClearanceNeededHasTheOnsetAtThePeak(t *testing.T) {
 	for _, v := range []quantity.Voltage{1 * kV, 20 * kV, 200 * kV} {
-		for _, g := range []gap.Gap{plates(0), {Shape: &gap.Shape{Kind: gap.Coaxial, InnerRadius: 10 * mm}}} {
+		for _, g := range []gap.Gap{plates(0), prepared(gap.Gap{Shape: &gap.Shape{Kind: gap.Coaxial, InnerRadius: 10 * mm}})} {
 			a, err := vacuum.ClearanceNeeded(g, gap.Voltages{Peak: v})
 			if err != nil {
 				t.Fatalf("%s: %v", quantity.Text(v), err)

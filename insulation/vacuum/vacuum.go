@@ -8,8 +8,6 @@
 package vacuum
 
 import (
-	"math"
-
 	"kilovet/hv/lack"
 	"kilovet/hv/quantity"
 	"kilovet/insulation/gap"
@@ -78,25 +76,13 @@ func reach(g gap.Gap) (closest, widest quantity.Length) {
 // stand more at the closest, are a lack.
 func gapOf(g gap.Gap, wanted quantity.Length) (quantity.Length, error) {
 	closest, widest := reach(g)
-	place := func(u float64) quantity.Length { return closest * quantity.Length(math.Exp(u-1)) }
-	excess := func(u float64) (float64, error) {
-		x, err := even(withGap(g, place(u)))
-		return math.Log(float64(x / wanted)), err
-	}
-	most := 1 + math.Log(float64(widest/closest))
-	low, err := excess(1)
-	if err != nil {
-		return 0, err
-	}
-	high, err := excess(most)
-	switch {
-	case err != nil:
-		return 0, err
-	case low > 0:
-		return 0, lack.Range("even %s, the closest gap of the law, stands more", quantity.Text(closest))
-	case high < 0:
-		return 0, lack.Range("even %s between these electrodes stands less: they are too sharp", quantity.Text(widest))
-	}
-	u, err := solve.Rise(1, most, excess)
-	return place(u), err
+	x, err := solve.Level(float64(closest), float64(widest), float64(wanted), func(d float64) (float64, error) {
+		x, err := even(withGap(g, quantity.Length(d)))
+		return float64(x), err
+	}, func() error {
+		return lack.Range("even %s, the closest gap of the law, stands more", quantity.Text(closest))
+	}, func() error {
+		return lack.Range("even %s between these electrodes stands less: they are too sharp", quantity.Text(widest))
+	})
+	return quantity.Length(x), err
 }

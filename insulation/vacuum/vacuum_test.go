@@ -49,7 +49,13 @@ func marked[Q quantity.Number](t *testing.T, what string, a gap.Answer[Q]) {
 }
 
 func plates(d quantity.Length) gap.Gap {
-	return gap.Gap{Medium: gap.Vacuum, Clearance: d, Shape: &gap.Shape{Kind: gap.Plates}}
+	return prepared(gap.Gap{Clearance: d, Shape: &gap.Shape{Kind: gap.Plates}})
+}
+
+// prepared is the gap with polished, conditioned electrodes of a small area.
+func prepared(g gap.Gap) gap.Gap {
+	g.Medium, g.Polished, g.Conditioned, g.StressedArea = gap.Vacuum, new(true), new(true), 1e-4
+	return g
 }
 
 // shapes are gaps of all kinds, their sharpest radius 3 mm.
@@ -58,7 +64,7 @@ func shapes(d quantity.Length) map[gap.Kind]gap.Gap {
 	for _, k := range []gap.Kind{gap.Coaxial, gap.ConcentricSpheres, gap.SpherePlane, gap.SphereSphere,
 		gap.CylinderPlane, gap.ParallelCylinders, gap.PointPlane, gap.RoundedEdge} {
 		s := gap.Shape{Kind: k, OuterRadius: 3*mm + d}.WithSharpest(3 * mm)
-		all[k] = gap.Gap{Medium: gap.Vacuum, Clearance: d, Shape: &s}
+		all[k] = prepared(gap.Gap{Clearance: d, Shape: &s})
 	}
 	return all
 }

@@ -222,6 +222,7 @@ func compared(g gap.Gap, v gap.Voltages) []gap.Beside[quantity.Length] {
 		r := table.ConverterSpacing(v.Peak)
 		shown = append(shown, gap.Beside[quantity.Length]{Value: r.Value, Source: r.Source})
 	}
+	shown = append(shown, dischargeFree(g, v)...)
 	if impulse, _, err := ratedImpulse(g, v); err == nil && impulse > 0 {
 		if r, err := table.CombinedClearance(v.Peak, impulse); err == nil {
 			shown = append(shown, gap.Beside[quantity.Length]{Value: r.Value, Source: r.Source})
@@ -261,4 +262,18 @@ func fieldCase(g gap.Gap) judged {
 		return judged{Case: table.CaseB, remark: "; homogeneous by its shape and impulse tested"}
 	}
 	return judged{Case: table.CaseA, remark: "; the shape is not homogeneous, case A in spite of the test"}
+}
+
+// dischargeFree is what Table F.9 asks of sharp electrodes where that is more than Table
+// F.8 does: shown only, since the field decides on partial discharge.
+func dischargeFree(g gap.Gap, v gap.Voltages) []gap.Beside[quantity.Length] {
+	free, err := DischargeFreeClearance(g, v)
+	steady, err2 := table.SteadyClearance(table.CaseA).At(v.Peak)
+	if err != nil || err2 != nil || g.Medium == gap.PrintedBoard || quantity.AtMost(free.Value, steady.Value) {
+		return nil
+	}
+	source := free.Sources[0]
+	source.Governs = false
+	source.Text += ", sharp electrodes free of partial discharge (does not decide: the field does)"
+	return []gap.Beside[quantity.Length]{{Value: free.Value, Source: source}}
 }

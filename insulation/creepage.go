@@ -18,6 +18,9 @@ func CreepageNeeded(g gap.Gap, v gap.Voltages) (gap.Answer[quantity.Length], err
 	if creepage := mediumOf(g).creepage; creepage != nil {
 		return creepage(g, v.For(g.Class()))
 	}
+	if g.Medium == gap.InGas && g.Filling() != gap.AirGas {
+		return alongInGas(g, v)
+	}
 	if err := inAir(g); err != nil {
 		return none, err
 	}
@@ -25,6 +28,11 @@ func CreepageNeeded(g gap.Gap, v gap.Voltages) (gap.Answer[quantity.Length], err
 	if err != nil {
 		return none, err
 	}
+	return creepageOf(g, v, group, source)
+}
+
+// creepageOf is the creepage in air for a material group.
+func creepageOf(g gap.Gap, v gap.Voltages, group table.Group, source gap.Source) (gap.Answer[quantity.Length], error) {
 	clearance, noClearance := ClearanceNeeded(g, v)
 	if group == table.NonTracking {
 		clearance.Because = "no tracking: the clearance is enough, " + clearance.Because
@@ -33,7 +41,7 @@ func CreepageNeeded(g gap.Gap, v gap.Voltages) (gap.Answer[quantity.Length], err
 	}
 	a, err := tracked(g, v.LongTerm, group)
 	if err != nil {
-		return none, err
+		return gap.Answer[quantity.Length]{}, err
 	}
 	a.Sources = append(a.Sources, source)
 	a.Assumptions = append(a.Assumptions, slowCreepage(v)...)

@@ -111,6 +111,9 @@ func TestOtherMediaAreNotAnsweredByTheTablesOfAir(t *testing.T) {
 	g := feedthrough()
 	g.Medium, g.Gas, g.Pressure = gap.InGas, gap.SulphurHexafluoride, 101325
 	a := insulation.Assess(g, gap.Voltages{Peak: 5e3, LongTerm: 5e3})
+	if a.CreepageNeeded.Lack != nil || len(a.CreepageNeeded.Assumptions) == 0 {
+		t.Errorf("SF6 at normal pressure: a surface needs %v (%v)", a.CreepageNeeded.Value, a.CreepageNeeded.Lack)
+	}
 	if a.ClearanceNeeded.Lack == nil || a.Onset.Lack != nil || a.Onset.Value < 2*insulation.Assess(feedthrough(), gap.Voltages{}).Onset.Value {
 		t.Errorf("SF6: clearance %v, onset %v (%v)", a.ClearanceNeeded.Value, a.Onset.Value, a.Onset.Lack)
 	}

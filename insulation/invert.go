@@ -10,6 +10,7 @@ import (
 	"kilovet/insulation/shape"
 	"kilovet/insulation/solve"
 	"kilovet/insulation/table"
+	"kilovet/insulation/vacuum"
 )
 
 // The inversions ask the same laws backwards: the gap or radius at which a law gives a
@@ -18,6 +19,9 @@ import (
 // ClearanceForBreakdown is the gap whose breakdown is at a voltage; its shape keeps its
 // sharpest radius.
 func ClearanceForBreakdown(g gap.Gap, v quantity.Voltage, sharp gap.Polarity) (quantity.Length, error) {
+	if law := mediumOf(g).forBreakdown; law != nil {
+		return law(g, v)
+	}
 	return overGaps(g, float64(v), func(g gap.Gap) (float64, error) {
 		a, err := Breakdown(g, sharp)
 		return float64(a.Value), err
@@ -26,6 +30,9 @@ func ClearanceForBreakdown(g gap.Gap, v quantity.Voltage, sharp gap.Polarity) (q
 
 // ClearanceForOnset is the gap at which a discharge starts at a voltage.
 func ClearanceForOnset(g gap.Gap, v quantity.Voltage) (quantity.Length, error) {
+	if law := mediumOf(g).forOnset; law != nil {
+		return law(g, v)
+	}
 	return overGaps(g, float64(v), func(g gap.Gap) (float64, error) {
 		a, err := Onset(g)
 		return float64(a.Value), err
@@ -48,6 +55,25 @@ func RadiusForOnset(g gap.Gap, v quantity.Voltage) (quantity.Length, error) {
 		a, err := Onset(g)
 		return float64(a.Value), err
 	})
+}
+
+// RadiusForBreakdown is the sharpest radius, at the gap given, whose breakdown is at a
+// voltage. Where sharp electrodes stand it already, and where plates do not, there is a
+// lack.
+func RadiusForBreakdown(g gap.Gap, v quantity.Voltage, sharp gap.Polarity) (quantity.Length, error) {
+	return overRadii(g, float64(v), func(g gap.Gap) (float64, error) {
+		a, err := Breakdown(g, sharp)
+		return float64(a.Value), err
+	})
+}
+
+// CreepageForFlashover is the length of a surface in vacuum whose flashover is at a
+// voltage. Elsewhere the surface has no voltage of its own, a lack.
+func CreepageForFlashover(g gap.Gap, v quantity.Voltage) (quantity.Length, error) {
+	if g.Medium != gap.Vacuum {
+		return 0, lack.Range("no flashover voltage of surfaces in %s is computed", string(g.Medium))
+	}
+	return vacuum.ReferenceOf(g).LengthFor(v)
 }
 
 // RadiusForField is the sharpest radius, at the gap given, whose peak field at a voltage

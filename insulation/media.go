@@ -15,33 +15,39 @@ type medium struct {
 	creepage  func(gap.Gap, gap.Voltages) (gap.Answer[quantity.Length], error)
 	onset     func(gap.Gap) (gap.Answer[quantity.Voltage], error)
 	breakdown func(gap.Gap) (gap.Answer[quantity.Voltage], error)
+	// the gap whose breakdown or onset is at a voltage
+	forBreakdown func(gap.Gap, quantity.Voltage) (quantity.Length, error)
+	forOnset     func(gap.Gap, quantity.Voltage) (quantity.Length, error)
 }
 
 // mediumOf is the medium of a gap without gas; the zero medium where gas fills it.
 func mediumOf(g gap.Gap) medium {
 	switch g.Medium {
 	case gap.Vacuum:
-		return medium{vacuum.ClearanceNeeded, alongInVacuum, vacuum.Onset, acrossVacuum}
+		return medium{vacuum.ClearanceNeeded, alongInVacuum, vacuum.Onset, acrossVacuum, vacuum.ClearanceForBreakdown, vacuum.ClearanceForOnset}
 	case gap.Solid:
-		return medium{clearance: solid.ClearanceNeeded, breakdown: solid.Breakdown}
+		return medium{clearance: solid.ClearanceNeeded, creepage: alongTested, breakdown: solid.Breakdown, forBreakdown: solid.ThicknessForBreakdown}
 	case gap.Oil:
-		return medium{clearance: oil.ClearanceNeeded, breakdown: oil.Breakdown}
+		return medium{clearance: oil.ClearanceNeeded, creepage: alongTested, breakdown: oil.Breakdown, forBreakdown: oil.ClearanceForBreakdown}
 	}
 	return medium{}
 }
 
 func alongInVacuum(g gap.Gap, v gap.Voltages) (gap.Answer[quantity.Length], error) {
-	return vacuum.CreepageNeeded(g, v, vacuum.AluminaPractice)
+	return vacuum.CreepageNeeded(g, v, vacuum.ReferenceOf(g))
 }
 
 // acrossVacuum is what a gap in vacuum stands: where an insulator bridges it, the lower
 // of the gap itself and the flashover of its surface.
 func acrossVacuum(g gap.Gap) (gap.Answer[quantity.Voltage], error) {
+	if g.Clearance <= 0 && g.Creepage > 0 {
+		return vacuum.Flashover(g, vacuum.ReferenceOf(g))
+	}
 	across, err := vacuum.Breakdown(g)
 	if g.Creepage <= 0 || err != nil {
 		return across, err
 	}
-	along, err := vacuum.Flashover(g, vacuum.AluminaPractice)
+	along, err := vacuum.Flashover(g, vacuum.ReferenceOf(g))
 	if err != nil || along.Value < across.Value {
 		return along, err
 	}

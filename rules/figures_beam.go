@@ -135,8 +135,7 @@ func width(of func() quantity.ElectronEnergy, err error) quantity.ElectronEnergy
 
 // spacings lists what each spacing needs and stands.
 func spacings(c *collector, e *evidence.Evidence) {
-	for i := range e.Chain().Spacings {
-		s := &e.Chain().Spacings[i]
+	for _, s := range e.Spacings() {
 		x, err := e.Spacing(s)
 		if err != nil {
 			continue

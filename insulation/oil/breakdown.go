@@ -68,22 +68,32 @@ var cautiousSource = gap.Source{Text: "10 kV/mm, the low end of 10 to 15.7 kV/mm
 
 // Breakdown is the voltage at which oil is expected to break down where its peak field
 // reaches 10 kV/mm; beside it stands what the laws of clean oil give. From the 2.5 mm of
-// the standard test to 12 mm, where the pairs of those laws end; other gaps and a missing
-// shape are a lack. It holds for oil that is known to pass the standard test.
+// the standard test on; past 12 mm, where the pairs of those laws end, the same electrodes
+// 12 mm apart judge. Closer gaps, oil that failed its test and a missing shape are a lack.
 func Breakdown(g gap.Gap) (gap.Answer[quantity.Voltage], error) {
 	none := gap.Answer[quantity.Voltage]{}
 	l, err := lineOf(g)
 	if err != nil {
 		return none, err
 	}
-	if d := l.Gap(); !quantity.AtLeast(d, testGap) || !quantity.AtMost(d, longestClean) {
-		return none, lack.Range("breakdown of oil is known from 2.5 to 12 mm, asked for %s", quantity.Text(d))
+	because := "oil at 10 kV/mm of peak field"
+	if d := l.Gap(); !quantity.AtMost(d, longestClean) {
+		because += ", the same electrodes 12 mm apart, where the data end"
+		if l, err = lineOf(withGap(g, longestClean)); err != nil {
+			return none, err
+		}
+	} else if !quantity.AtLeast(d, testGap) {
+		return none, lack.Range("breakdown of oil is known from 2.5 mm on, asked for %s", quantity.Text(d))
+	}
+	assumed, tested, err := passes(g)
+	if err != nil {
+		return none, err
 	}
 	a := gap.Answer[quantity.Voltage]{
 		Value:       quantity.Voltage(float64(cautious) / float64(l.PerVolt(0))),
-		Because:     "oil at 10 kV/mm of peak field",
-		Sources:     []gap.Source{cautiousSource.Governing()},
-		Assumptions: []string{"the oil passes its standard test: above 30 kV over 2.5 mm, dry, settled and free of bubbles"},
+		Because:     because,
+		Sources:     append([]gap.Source{cautiousSource.Governing()}, tested...),
+		Assumptions: assumed,
 	}
 	if clean, err := CleanBreakdown(l.Gap()); err == nil {
 		a.Shown = []gap.Beside[quantity.Voltage]{{Value: clean.Value * quantity.Voltage(l.Utilisation()), Source: clean.Sources[0]}}

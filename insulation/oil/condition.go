@@ -37,6 +37,25 @@ func ConditionOf(test quantity.Voltage) (Condition, gap.Source, error) {
 	return Failed, source, nil
 }
 
+// passes are the assumptions and sources that go with the state of the oil of a gap. Oil
+// that failed its test is a lack: it is treated or replaced, not judged.
+func passes(g gap.Gap) ([]string, []gap.Source, error) {
+	if g.OilTest <= 0 {
+		return []string{"the oil passes its standard test: above 30 kV over 2.5 mm, dry, settled and free of bubbles"}, nil, nil
+	}
+	condition, source, err := ConditionOf(g.OilTest)
+	source.Governs = false
+	switch {
+	case err != nil:
+		return nil, nil, err
+	case condition == Failed:
+		return nil, nil, lack.Range("oil that broke down at %s in the standard test is treated or replaced before it is judged", quantity.Text(g.OilTest))
+	case condition == Caution:
+		return []string{"the oil is " + string(Caution) + ": " + quantity.Text(g.OilTest) + " in the standard test"}, []gap.Source{source}, nil
+	}
+	return nil, []gap.Source{source}, nil
+}
+
 // DegassingLoss is the part of its strength that an oil gap with a sharp electrode loses
 // while the oil stands under some hundred mTorr: half where that is negative or not
 // known, a tenth where it is positive. No oil tank is switched on while it is degassed.

@@ -180,10 +180,8 @@ func TestClearanceNeededKeepsTheWorkingField(t *testing.T) {
 }
 
 func TestOilLacks(t *testing.T) {
-	for _, d := range []quantity.Length{2.4 * mm, 12.1 * mm} {
-		_, err := oil.Breakdown(plates(d))
-		lacks(t, quantity.Text(d), err, lack.Outside)
-	}
+	_, err := oil.Breakdown(plates(2.4 * mm))
+	lacks(t, "2.4 mm", err, lack.Outside)
 	for _, d := range []quantity.Length{3.9 * mm, 12.1 * mm} {
 		_, err := oil.CleanBreakdown(d)
 		lacks(t, quantity.Text(d), err, lack.Outside)
@@ -192,7 +190,7 @@ func TestOilLacks(t *testing.T) {
 		_, err := oil.CleanGap(v)
 		lacks(t, quantity.Text(v), err, lack.Outside)
 	}
-	_, err := oil.ClearanceForBreakdown(plates(0), 200*kV)
+	_, err = oil.ClearanceForBreakdown(plates(0), 200*kV)
 	lacks(t, "past 12 mm", err, lack.Outside)
 	_, err = oil.ClearanceForBreakdown(plates(0), 20*kV)
 	lacks(t, "under 2.5 mm", err, lack.Outside)
@@ -240,4 +238,37 @@ func TestWarningsAreMarkedAndDistinct(t *testing.T) {
 	if !seen["degassing"] {
 		t.Error("no warning of degassing")
 	}
+}
+
+// Past 12 mm, where the data end, a gap stands what the same electrodes 12 mm apart do:
+// never less than a closer one, and not what was not measured.
+func TestWideGapsOfOilGainNothing(t *testing.T) {
+	at, _ := oil.Breakdown(plates(12 * mm))
+	wide, err := oil.Breakdown(plates(40 * mm))
+	if err != nil || wide.Value != at.Value || wide.Because == at.Because {
+		t.Errorf("40 mm: %v (%v), 12 mm: %v", wide.Value, err, at.Value)
+	}
+}
+
+// The bands of the standard test: oil below 30 kV is not judged, oil to be watched stays
+// an assumption, good oil none.
+func TestTheStandardTestDecidesWhetherOilIsJudged(t *testing.T) {
+	assumptions := func(test quantity.Voltage) int {
+		g := plates(10 * mm)
+		g.OilTest = test
+		a, err := oil.Breakdown(g)
+		if err != nil {
+			t.Fatal(err)
+		}
+		return len(a.Assumptions)
+	}
+	if n := []int{assumptions(0), assumptions(40 * kV), assumptions(60 * kV), assumptions(75 * kV)}; n[0] != 1 || n[1] != 1 || n[2] != 0 || n[3] != 0 {
+		t.Errorf("assumptions %v", n)
+	}
+	g := plates(10 * mm)
+	g.OilTest = 25 * kV
+	_, err := oil.Breakdown(g)
+	lacks(t, "25 kV", err, lack.Outside)
+	_, err = oil.ClearanceNeeded(g, gap.Voltages{Peak: 20 * kV})
+	lacks(t, "25 kV", err, lack.Outside)
 }

@@ -31,10 +31,14 @@ func ClearanceNeeded(g gap.Gap, v gap.Voltages) (gap.Answer[quantity.Length], er
 	if err != nil {
 		return gap.Answer[quantity.Length]{}, err
 	}
+	assumed, tested, err := passes(g)
+	if err != nil {
+		return gap.Answer[quantity.Length]{}, err
+	}
 	a := gap.Answer[quantity.Length]{
 		Value: d, Because: quantity.Text(v.Peak) + " peak at 2 kV/mm in oil",
-		Sources:     []gap.Source{workingSource.Governing()},
-		Assumptions: []string{"the working stress of oil is common practice, no source was read"},
+		Sources:     append([]gap.Source{workingSource.Governing()}, tested...),
+		Assumptions: append([]string{"the working stress of oil is common practice, no source was read"}, assumed...),
 	}
 	if bold, err := gapAt(g, v.Peak, BoldField); err == nil {
 		a.Shown = []gap.Beside[quantity.Length]{{Value: bold, Source: boldSource}}

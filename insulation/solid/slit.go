@@ -23,7 +23,7 @@ type Stress struct {
 
 // Takes is what the annulus takes of a voltage on the conductor.
 func (s Slit) Takes(v quantity.Voltage, how Sharing) (Stress, error) {
-	share, err := s.share(how)
+	share, err := s.Share(how)
 	if err != nil {
 		return Stress{}, err
 	}
@@ -35,8 +35,8 @@ func (s Slit) Takes(v quantity.Voltage, how Sharing) (Stress, error) {
 	return Stress{Voltage: u, Field: l.Peak(u)}, nil
 }
 
-// share is the part of the voltage on the conductor that the annulus takes.
-func (s Slit) share(how Sharing) (quantity.Fraction, error) {
+// Share is the part of the voltage on the conductor that the annulus takes.
+func (s Slit) Share(how Sharing) (quantity.Fraction, error) {
 	inner, _, outer, err := s.sleeve.Shares(how)
 	switch {
 	case err != nil:
@@ -57,15 +57,21 @@ func (s Slit) line() (shape.Line, error) {
 // SparksInGas is the peak voltage on the conductor at which the annulus begins to spark
 // in a gas. The sleeve holds the arc off, each spark is a partial discharge that eats it.
 func (s Slit) SparksInGas(state gas.State, how Sharing) (gap.Answer[quantity.Voltage], error) {
+	starts, err := s.AcrossInGas(state)
+	return s.onConductor(starts, err, how)
+}
+
+// AcrossInGas is the voltage across the annulus itself at which a gas in it sparks.
+func (s Slit) AcrossInGas(state gas.State) (gap.Answer[quantity.Voltage], error) {
 	l, err := s.line()
 	if err != nil {
 		return gap.Answer[quantity.Voltage]{}, err
 	}
 	starts, err := gas.Onset(state, l, gap.Smooth)
 	if err != nil {
-		starts, err = thin(state, l)
+		return thin(state, l)
 	}
-	return s.onConductor(starts, err, how)
+	return starts, nil
 }
 
 // thin is the onset of an annulus under the reach of the streamer criterion, or of another
@@ -81,10 +87,16 @@ func thin(state gas.State, l shape.Line) (gap.Answer[quantity.Voltage], error) {
 // EmitsInVacuum is the voltage on the conductor at which the annulus, in vacuum, begins to
 // emit or breaks down.
 func (s Slit) EmitsInVacuum(how Sharing) (gap.Answer[quantity.Voltage], error) {
-	starts, err := vacuum.Onset(gap.Gap{
+	starts, err := s.AcrossInVacuum()
+	return s.onConductor(starts, err, how)
+}
+
+// AcrossInVacuum is the voltage across the annulus itself at which it emits or breaks
+// down in vacuum.
+func (s Slit) AcrossInVacuum() (gap.Answer[quantity.Voltage], error) {
+	return vacuum.Onset(gap.Gap{
 		Medium: gap.Vacuum, Shape: &gap.Shape{Kind: gap.Coaxial, InnerRadius: s.From, OuterRadius: s.To},
 	})
-	return s.onConductor(starts, err, how)
 }
 
 // onConductor turns an onset across the annulus into one on the conductor.
@@ -92,7 +104,7 @@ func (s Slit) onConductor(a gap.Answer[quantity.Voltage], err error, how Sharing
 	if err != nil {
 		return gap.Answer[quantity.Voltage]{}, err
 	}
-	share, err := s.share(how)
+	share, err := s.Share(how)
 	if err != nil {
 		return gap.Answer[quantity.Voltage]{}, err
 	}

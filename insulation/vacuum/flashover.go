@@ -31,6 +31,15 @@ var AluminaPractice = Reference{
 	Source: gap.Source{Text: "alumina in vacuum, DC, 1 kV/mm", Mark: gap.Practice},
 }
 
+// ReferenceOf is the tested pair of a gap where one was given, else practice.
+func ReferenceOf(g gap.Gap) Reference {
+	if g.Tested.Voltage <= 0 || g.Tested.Length <= 0 {
+		return AluminaPractice
+	}
+	return Reference{Voltage: g.Tested.Voltage, Length: g.Tested.Length, Source: gap.Source{
+		Text: "tested: " + quantity.Text(g.Tested.Voltage) + " over " + quantity.Text(g.Tested.Length) + ", as the description says", Mark: gap.Read}}
+}
+
 var rootSource = gap.Source{Text: "flashover grows with the root of the length, Pillai and Hackam, Surface flashover of solid dielectric in vacuum, abstract", Mark: gap.Read}
 
 // Lengths between samples of a millimetre and the longest single insulator known here.

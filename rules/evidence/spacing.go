@@ -18,6 +18,30 @@ type Spacing struct {
 	Assessment insulation.Assessment
 }
 
+// Spacings are the described spacings and those of the feedthroughs.
+func (e *Evidence) Spacings() []*chain.Spacing {
+	all, _ := remember(e.Under(Condition{}), "spacings", func() ([]*chain.Spacing, error) {
+		var all []*chain.Spacing
+		for i := range e.chain.Spacings {
+			all = append(all, &e.chain.Spacings[i])
+		}
+		for i := range e.chain.Feedthroughs {
+			parts := e.chain.Feedthroughs[i].Spacings()
+			for j := range parts {
+				all = append(all, &parts[j])
+			}
+		}
+		return all, nil
+	})
+	return all
+}
+
+// Surface is the part of a spacing's creepage that counts, and why something was taken
+// off.
+func (x Spacing) Surface() (quantity.Length, string, error) {
+	return insulation.SurfaceCounted(x.Gap, x.Voltages)
+}
+
 // Spacing assesses a spacing at its highest voltage: the peak over all states and
 // corners, the lasting voltage over those that can stand for long.
 func (e *Evidence) Spacing(s *chain.Spacing) (Spacing, error) {
@@ -75,6 +99,13 @@ func (e *Evidence) gap(s *chain.Spacing) gap.Gap {
 		Material: s.Material.V, Temperature: s.Temperature.V, Pressure: s.Pressure.V,
 		GaugeFactor: s.GaugeFactor.V, Gas: gap.Gas(s.Gas.V), ImpulseTested: s.ImpulseTested.V, Mains: e.mains(s),
 	}
+	g.Board, g.Surface = gap.Board(s.Board.V), gap.Surface(s.ElectrodeSurface.V)
+	g.StressedArea, g.OilTest, g.Strength, g.Specimen = s.StressedArea.V, s.OilTest.V, s.Strength.V, s.TestedThickness.V
+	g.Tested = gap.Tested{Voltage: s.TestedVoltage.V, Length: s.TestedLength.V}
+	g.Polished, g.Conditioned = said(s.Finish, "polished"), said(s.Conditioned, true)
+	if r := s.Ribs; r != nil {
+		g.Ribs = gap.Ribs{Count: r.Count.V, Depth: r.Depth.V, Width: r.Width.V}
+	}
 	if s.CTI.Set() {
 		g.CTI = &s.CTI.V
 	}
@@ -91,6 +122,14 @@ func (e *Evidence) gap(s *chain.Spacing) gap.Gap {
 		}
 	}
 	return g
+}
+
+// said is whether a key has a value, nil where it was not given.
+func said[T comparable](key document.Given[T], value T) *bool {
+	if !key.Set() {
+		return nil
+	}
+	return new(key.V == value)
 }
 
 func shapeOf(s *chain.Shape) *gap.Shape {

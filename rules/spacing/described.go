@@ -117,8 +117,8 @@ func covered(e *evidence.Evidence, p pair) bool {
 	if h := c.Heater; h != nil && h.Feed != nil && h.Feed.RatedVoltage.Set() && matches(e, p, "cathode", "mains") {
 		return true
 	}
-	return slices.ContainsFunc(c.Spacings, func(s chain.Spacing) bool {
-		return s.From.Set() && slices.ContainsFunc(ends(&s), func(from string) bool { return matches(e, p, from, s.To.V) })
+	return slices.ContainsFunc(e.Spacings(), func(s *chain.Spacing) bool {
+		return s.From.Set() && slices.ContainsFunc(ends(s), func(from string) bool { return matches(e, p, from, s.To.V) })
 	})
 }
 

@@ -29,6 +29,9 @@ var clearance = rule.Rule{
 	},
 	Judge: func(e *evidence.Evidence) rule.Judgement {
 		return each(e, func(s *chain.Spacing) (rule.Finding, string) {
+			if s.Of != nil && !s.Clearance.Set() {
+				return rule.Finding{}, "a surface of a feedthrough whose gap is judged apart"
+			}
 			if otherGas(s) {
 				return rule.Finding{}, "no table asks for a clearance in gases other than air: the breakdown estimate decides"
 			}
@@ -40,7 +43,7 @@ var clearance = rule.Rule{
 var creepage = rule.Rule{
 	ID: "spacing.creepage", Title: "Creepage distance",
 	Demands: "The distance along the surface is at least what the tables ask for at the highest lasting voltage, and never less than the clearance needed.",
-	Applies: "Every spacing in air or on a printed board, and surfaces in vacuum where a creepage distance is given.",
+	Applies: "Every spacing in air or on a printed board, and surfaces in other media where a creepage distance is given: in vacuum from a tested surface or the practice of alumina, in nitrogen and sulphur hexafluoride at normal pressure as in air, elsewhere from a tested surface.",
 	Margin:  "marginal with less than 10 % in hand",
 	Concern: rule.Life,
 	Sources: []rule.Source{{Text: "IEC 60664-1:2020 Table F.5", Mark: rule.Read, Governs: true}},
@@ -50,13 +53,8 @@ var creepage = rule.Rule{
 	},
 	Judge: func(e *evidence.Evidence) rule.Judgement {
 		return each(e, func(s *chain.Spacing) (rule.Finding, string) {
-			if !inAir(s) && !s.Creepage.Set() {
-				return rule.Finding{}, "creepage is judged on surfaces in air, and in vacuum where one is given"
-			}
-			if !inAir(s) && s.Medium.V != "vacuum" {
-				f := finding("spacing.creepage", concern(s), rule.AtLeast, s)
-				f.Place = s.Creepage.Place
-				return f.Lacking(lack.Range("surfaces in %s are not judged", s.Medium.V)), ""
+			if !s.Creepage.Set() && (!inAir(s) || s.Of != nil) {
+				return rule.Finding{}, "creepage is judged on surfaces in air, and in other media where one is given"
 			}
 			return distance(e, s, "spacing.creepage", s.Creepage, func(x evidence.Spacing) gap.Result[quantity.Length] { return x.Assessment.CreepageNeeded }), ""
 		})
@@ -89,9 +87,34 @@ func distance(e *evidence.Evidence, s *chain.Spacing, id string, given document.
 	}
 	f.Sources = append(rule.Cited(need.Sources), shown(need.Answer)...)
 	f.Because = fmt.Sprintf("%s peak, %s lasting: %s", quantity.Text(x.Voltages.Peak), quantity.Text(x.Voltages.LongTerm), need.Because)
-	f.Remedy = fmt.Sprintf("widen it to %s or more, or lower the voltage", quantity.Text(need.Value))
+	if stands := x.Assessment.Breakdown; stands.Lack == nil && id == "spacing.clearance" {
+		f.Because += "; by physics it stands " + quantity.Text(stands.Value)
+	}
 	if !given.Set() {
 		return f.Lacking(lack.Key(given.Key))
 	}
-	return f.Least(rule.Of(given.V), rule.Of(need.Value), limits.DistanceMargin).Assume(need.Assumptions...).WithoutRemedyIfMet()
+	counted := given.V
+	if id == "spacing.creepage" {
+		taken := ""
+		if counted, taken, err = x.Surface(); err != nil {
+			return f.Lacking(err)
+		}
+		if taken != "" {
+			f.Because += "; " + taken
+		}
+	}
+	f = f.Least(rule.Of(counted), rule.Of(need.Value), limits.DistanceMargin).Assume(need.Assumptions...)
+	if f.Verdict != rule.Meets {
+		f.Remedy = alternatives(wider(s, given, need.Value+given.V-counted), lowered(id, x), "lower the voltage")
+	}
+	return f
+}
+
+// lowered is the highest peak that a clearance in air meets the table for.
+func lowered(id string, x evidence.Spacing) string {
+	v, err := x.PeakMet()
+	if id != "spacing.clearance" || err != nil || quantity.AtLeast(v, x.Voltages.Peak) {
+		return ""
+	}
+	return "keep the peak under " + quantity.Text(v)
 }

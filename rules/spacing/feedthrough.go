@@ -1,6 +1,10 @@
 package spacing
 
 import (
+	"fmt"
+	"strings"
+
+	"kilovet/hv/chain"
 	"kilovet/hv/lack"
 	"kilovet/rules/evidence"
 	"kilovet/rules/rule"
@@ -8,32 +12,82 @@ import (
 
 var weakest = rule.Rule{
 	ID: "feedthrough.weakest", Title: "Weakest part of a feedthrough",
-	Demands: "Every gap, surface and layer of a feedthrough meets what is asked of it; the weakest is named.",
+	Demands: "Every gap, surface and layer of a feedthrough meets what is asked of it; the weakest is named, with the dimension to change.",
 	Applies: "Every [[feedthrough]].",
 	Concern: rule.Life,
-	Sources: []rule.Source{{Text: "what was not described cannot be judged", Mark: rule.Practice, Governs: true}},
+	Sources: []rule.Source{{Text: "the part with the gravest verdict, of those the one with the least margin", Mark: rule.Practice, Governs: true}},
 	Example: rule.Example{
-		Swaps: []rule.Swap{{Was: "[[target]]\n", Becomes: `[[feedthrough]]
-name = "lens"
-voltage = "20 kV"
-pin = { radius = "3 mm" }
-hole = { radius = "20 mm" }
-air_side = { length = "150 mm" }
-
-[[target]]
-`}},
-		Changes: []rule.Change{{Rule: "feedthrough.weakest", Subject: "lens", Verdict: rule.Unassessed}},
+		Of:    "lead",
+		Swaps: []rule.Swap{{Was: `air_side        = { length = "60 mm"`, Becomes: `air_side        = { length = "11 mm"`}},
+		Changes: []rule.Change{
+			{Rule: "feedthrough.weakest", Subject: "furnace lead", Verdict: rule.Fails},
+			{Rule: "spacing.clearance", Subject: "furnace lead: air side", Verdict: rule.Fails},
+		},
 	},
 	Judge: func(e *evidence.Evidence) rule.Judgement {
 		if len(e.Chain().Feedthroughs) == 0 {
 			return rule.Over("no feedthrough is described")
 		}
+		parts := judgedParts(e)
 		var j rule.Judgement
 		for i := range e.Chain().Feedthroughs {
-			f := &e.Chain().Feedthroughs[i]
-			finding := rule.Finding{Rule: "feedthrough.weakest", Subject: f.Name.V, Concern: rule.Life, Place: f.Here()}
-			j.Findings = append(j.Findings, finding.Lacking(lack.Because("the parts of a feedthrough are not judged together: describe its gaps and surfaces as spacings", "spacing")))
+			j.Findings = append(j.Findings, judgeWeakest(&e.Chain().Feedthroughs[i], parts))
 		}
 		return j
 	},
+}
+
+// judgedParts are the findings of everything that feedthroughs have.
+func judgedParts(e *evidence.Evidence) []rule.Finding {
+	var all []rule.Finding
+	for _, r := range []rule.Rule{clearance, creepage, breakdown, corona, junction, annulus} {
+		all = append(all, r.Judge(e).Findings...)
+	}
+	return all
+}
+
+func judgeWeakest(f *chain.Feedthrough, all []rule.Finding) rule.Finding {
+	x := rule.Finding{Rule: "feedthrough.weakest", Subject: f.Name.V, Concern: concernOf(f), Relation: rule.Presence, Place: f.Here()}
+	var worst *rule.Finding
+	n := 0
+	for i := range all {
+		if !strings.HasPrefix(all[i].Subject, f.Name.V+": ") {
+			continue
+		}
+		n++
+		if worst == nil || weaker(all[i], *worst) {
+			worst = &all[i]
+		}
+	}
+	if worst == nil {
+		return x.Lacking(lack.Because("nothing of it can be judged"))
+	}
+	x.Verdict, x.Under, x.Place, x.Remedy, x.Missing, x.Assumptions = worst.Verdict, worst.Under, worst.Place, worst.Remedy, worst.Missing, worst.Assumptions
+	x.Sources = worst.Sources
+	part := strings.TrimPrefix(worst.Subject, f.Name.V+": ")
+	x.Because = fmt.Sprintf("of %d findings about it the weakest is %s of its %s%s: %s", n, strings.TrimPrefix(strings.TrimPrefix(worst.Rule, "spacing."), "feedthrough."), part, inHand(*worst), worst.Because)
+	return x
+}
+
+// weaker reports whether a finding is graver than another, or as grave with less in hand.
+func weaker(a, b rule.Finding) bool {
+	if a.Verdict != b.Verdict {
+		return rule.Graver(a.Verdict, b.Verdict)
+	}
+	return a.Margin != nil && (b.Margin == nil || *a.Margin < *b.Margin)
+}
+
+// inHand is the margin of a finding in words.
+func inHand(f rule.Finding) string {
+	if f.Margin == nil {
+		return ""
+	}
+	return fmt.Sprintf(" with %+.0f %% in hand", 100**f.Margin)
+}
+
+func concernOf(f *chain.Feedthrough) rule.Concern {
+	if f.Insulation.V == "functional" {
+		return rule.Equipment
+	}
+	return rule.Life
 }

@@ -12,7 +12,7 @@ import (
 
 // Rules lists the rules of this family.
 func Rules() []rule.Rule {
-	return []rule.Rule{described, clearance, creepage, breakdown, corona, weakest, fieldStrength}
+	return []rule.Rule{described, clearance, creepage, breakdown, corona, junction, annulus, weakest, fieldStrength}
 }
 
 func finding(id string, concern rule.Concern, relation rule.Relation, s *chain.Spacing) rule.Finding {
@@ -25,17 +25,17 @@ func finding(id string, concern rule.Concern, relation rule.Relation, s *chain.S
 
 // each judges every spacing, or says that there is none.
 func each(e *evidence.Evidence, judge func(*chain.Spacing) (rule.Finding, string)) rule.Judgement {
-	if len(e.Chain().Spacings) == 0 {
+	if len(e.Spacings()) == 0 {
 		return rule.Over("no spacing is described")
 	}
 	var j rule.Judgement
-	for i := range e.Chain().Spacings {
-		f, over := judge(&e.Chain().Spacings[i])
+	for _, s := range e.Spacings() {
+		f, over := judge(s)
 		if over != "" {
 			j.PassedOver = over
 			continue
 		}
-		j.Findings = append(j.Findings, f)
+		j.Findings = append(j.Findings, told(f, s))
 	}
 	if len(j.Findings) > 0 {
 		j.PassedOver = ""

@@ -2,6 +2,7 @@ package spacing
 
 import (
 	"fmt"
+	"strings"
 
 	"kilovet/hv/chain"
 	"kilovet/hv/quantity"
@@ -51,9 +52,12 @@ func judgeBreakdown(e *evidence.Evidence, s *chain.Spacing) rule.Finding {
 	f.Under = x.Under.Text()
 	f.Sources = append(append(rule.Cited(stands.Sources), breakdownSource), shown(stands.Answer)...)
 	f.Because = fmt.Sprintf("%s across a gap expected to break down at %s (%s)", quantity.Text(x.Voltages.Peak), quantity.Text(stands.Value), stands.Because)
-	f.Remedy = "widen the gap, round its electrodes, or lower the voltage"
 	limit := stands.Value * limits.BreakdownShare
-	return f.ShareOf(rule.Of(stands.Value)).Most(rule.Of(x.Voltages.Peak), rule.Of(limit), limits.BreakdownShare/limits.BreakdownComfort-1).Assume(stands.Assumptions...).WithoutRemedyIfMet()
+	f = f.ShareOf(rule.Of(stands.Value)).Most(rule.Of(x.Voltages.Peak), rule.Of(limit), limits.BreakdownShare/limits.BreakdownComfort-1).Assume(stands.Assumptions...)
+	if f.Verdict != rule.Meets {
+		f.Remedy = againstBreakdown(s, x)
+	}
+	return f
 }
 
 var coronaSource = rule.Source{Text: "highest voltage at most the onset estimate; corona makes ozone, noise and radio interference, it does not break a gap", Mark: rule.Practice}
@@ -79,6 +83,9 @@ func judgeCorona(e *evidence.Evidence, s *chain.Spacing) (rule.Finding, string) 
 	if s.Medium.V != "air" && s.Medium.V != "gas" {
 		return f, "corona is judged in air and gas"
 	}
+	if s.Of != nil && strings.HasSuffix(s.Name.V, ": "+chain.BareStrip) {
+		return f, "the live metal at the end of a bare cable is that of the air side"
+	}
 	x, err := e.Spacing(s)
 	if err != nil {
 		return f.Lacking(err), ""
@@ -93,12 +100,14 @@ func judgeCorona(e *evidence.Evidence, s *chain.Spacing) (rule.Finding, string) 
 	f.Under = x.Under.Text()
 	f.Sources = append(append(rule.Cited(onset.Sources), coronaSource), shown(onset.Answer)...)
 	f.Because = fmt.Sprintf("%s across a gap where discharge is expected from %s (%s)", quantity.Text(x.Voltages.Peak), quantity.Text(onset.Value), onset.Because)
-	f.Remedy = "round the sharper electrode"
 	f = f.Most(rule.Of(x.Voltages.Peak), rule.Of(onset.Value), limits.DistanceMargin).Assume(onset.Assumptions...)
 	if f.Verdict == rule.Fails {
 		f.Verdict = rule.Marginal
 	}
-	return f.WithoutRemedyIfMet(), ""
+	if f.Verdict != rule.Meets {
+		f.Remedy = againstCorona(s, x)
+	}
+	return f, ""
 }
 
 // quiet reports whether a gap without shape is at or below 2 kV peak and as wide as

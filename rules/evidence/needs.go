@@ -1,0 +1,51 @@
+package evidence
+
+import (
+	"kilovet/hv/quantity"
+	"kilovet/insulation"
+	"kilovet/insulation/gap"
+)
+
+// The sizes below ask the laws of a spacing backwards.
+
+// GapFor is the distance at which the spacing breaks down at a voltage, its sharpest
+// radius kept.
+func (x Spacing) GapFor(v quantity.Voltage) (quantity.Length, error) {
+	return insulation.ClearanceForBreakdown(x.Gap, v, x.Voltages.Sharp)
+}
+
+// RadiusFor is the sharpest radius at which it breaks down at a voltage, the distance kept.
+func (x Spacing) RadiusFor(v quantity.Voltage) (quantity.Length, error) {
+	return insulation.RadiusForBreakdown(x.Gap, v, x.Voltages.Sharp)
+}
+
+// SurfaceFor is the length of surface in vacuum that flashes over at a voltage.
+func (x Spacing) SurfaceFor(v quantity.Voltage) (quantity.Length, error) {
+	return insulation.CreepageForFlashover(x.Gap, v)
+}
+
+// RadiusForOnset is the sharpest radius at which a discharge starts at a voltage.
+func (x Spacing) RadiusForOnset(v quantity.Voltage) (quantity.Length, error) {
+	return insulation.RadiusForOnset(x.Gap, v)
+}
+
+// GapForOnset is the distance at which a discharge starts at a voltage.
+func (x Spacing) GapForOnset(v quantity.Voltage) (quantity.Length, error) {
+	return insulation.ClearanceForOnset(x.Gap, v)
+}
+
+// PeakMet is the highest peak that the distance meets the table for.
+func (x Spacing) PeakMet() (quantity.Voltage, error) { return insulation.PeakByTable(x.Gap) }
+
+// InOil is the distance between the same electrodes in oil.
+func (x Spacing) InOil() (quantity.Length, error) {
+	g := x.Gap
+	g.Medium = gap.Oil
+	a, err := insulation.ClearanceNeeded(g, x.Voltages)
+	return a.Value, err
+}
+
+// GapForOnset is the distance across an annulus at which it discharges at a voltage.
+func (a Annulus) GapForOnset(v quantity.Voltage) (quantity.Length, error) {
+	return insulation.ClearanceForOnset(a.Gap, v)
+}

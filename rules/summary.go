@@ -12,7 +12,11 @@ import (
 func summary(e *evidence.Evidence) []Line {
 	c := e.Chain()
 	if !e.HasSupply() {
-		return []Line{{"Chain", fmt.Sprintf("%d spacings at stated voltages, no supply", len(c.Spacings))}}
+		text := fmt.Sprintf("%d spacings at stated voltages, no supply", len(c.Spacings))
+		if n := len(c.Feedthroughs); n > 0 {
+			text = fmt.Sprintf("%d spacings and %d feedthroughs at stated voltages, no supply", len(c.Spacings), n)
+		}
+		return []Line{{"Chain", text}}
 	}
 	lines := []Line{
 		{"Supply", fmt.Sprintf("%s %s multiplier, %d stages, %s %s at %s", c.Multiplier.Polarity.V, c.Multiplier.Topology.Or("half-wave"),

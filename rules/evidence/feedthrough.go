@@ -109,8 +109,8 @@ func (e *Evidence) Mean(f *chain.Feedthrough) (quantity.Voltage, error) {
 	return most.Value, err
 }
 
-// Across is the voltage between the pin and the plate of a feedthrough.
-func (e *Evidence) Across(f *chain.Feedthrough) (gap.Voltages, Condition, error) {
+// AcrossPin is the voltage between the pin and the plate of a feedthrough.
+func (e *Evidence) AcrossPin(f *chain.Feedthrough) (gap.Voltages, Condition, error) {
 	s := &chain.Spacing{From: f.Node, Also: f.Also, Voltage: f.Voltage}
 	s.To = document.Given[string]{V: f.To.Or("ground"), Place: f.Node.Place}
 	v, under, _, err := e.across(s)

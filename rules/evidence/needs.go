@@ -4,6 +4,7 @@ import (
 	"kilovet/hv/quantity"
 	"kilovet/insulation"
 	"kilovet/insulation/gap"
+	"kilovet/insulation/solid"
 )
 
 // The sizes below ask the laws of a spacing backwards.
@@ -32,6 +33,15 @@ func (x Spacing) RadiusForOnset(v quantity.Voltage) (quantity.Length, error) {
 // GapForOnset is the distance at which a discharge starts at a voltage.
 func (x Spacing) GapForOnset(v quantity.Voltage) (quantity.Length, error) {
 	return insulation.ClearanceForOnset(x.Gap, v)
+}
+
+// WorkingShare is the part of the breakdown that a working voltage may be: a fourth in
+// solids, where nothing else is asked all of it.
+func WorkingShare(g gap.Gap) quantity.Fraction {
+	if g.Medium == gap.Solid {
+		return solid.Published.Of
+	}
+	return 1
 }
 
 // PeakMet is the highest peak that the distance meets the table for.

@@ -21,7 +21,7 @@ var annulus = rule.Rule{
 	Sources: []rule.Source{sparkSource},
 	Example: rule.Example{
 		Of:    "lead",
-		Swaps: []rule.Swap{{Was: `inner_radius = "4 mm", outer_radius = "16 mm"`, Becomes: `inner_radius = "4.6 mm", outer_radius = "16 mm", inner_gap = "air"`}},
+		Swaps: []rule.Swap{{Was: `inner_radius = "10 mm", outer_radius = "26 mm"`, Becomes: `inner_radius = "10.6 mm", outer_radius = "26 mm", inner_gap = "air"`}},
 		Changes: []rule.Change{
 			{Rule: "feedthrough.annulus", Subject: "furnace lead: pin to sleeve", Verdict: rule.Fails},
 			{Rule: "feedthrough.weakest", Subject: "furnace lead", Verdict: rule.Fails},
@@ -47,7 +47,7 @@ var annulus = rule.Rule{
 
 func judgeAnnulus(e *evidence.Evidence, f *chain.Feedthrough, a evidence.Annulus) rule.Finding {
 	x := rule.Finding{Rule: "feedthrough.annulus", Subject: a.Name, Concern: rule.Equipment, Relation: rule.AtMost, Place: a.Place}
-	v, under, err := e.Across(f)
+	v, under, err := e.AcrossPin(f)
 	if err != nil {
 		return x.Lacking(err)
 	}
@@ -88,6 +88,9 @@ func shared(a evidence.Annulus) string {
 
 // widened is the gap at which the annulus alone would hold its voltage.
 func widened(a evidence.Annulus, takes quantity.Voltage) string {
+	if a.Settled < 1 { // its part grows with its width
+		return ""
+	}
 	d, err := a.GapForOnset(takes * quantity.Voltage(1+limits.DistanceMargin))
 	if err != nil || quantity.AtMost(d, a.Gap.Clearance) {
 		return ""

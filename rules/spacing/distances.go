@@ -79,7 +79,11 @@ func distance(e *evidence.Evidence, s *chain.Spacing, id string, given document.
 	}
 	need := needed(x)
 	if need.Lack != nil {
-		return f.Lacking(need.Lack)
+		f = f.Lacking(need.Lack)
+		if given.Set() && need.Lack.Kind != lack.Missing {
+			f.Remedy = alternatives(rounded(s, x, x.Voltages.Peak/quantity.Voltage(evidence.WorkingShare(x.Gap))), f.Remedy)
+		}
+		return f
 	}
 	f.Under = x.Under.Text()
 	if id == "spacing.creepage" {
@@ -104,7 +108,11 @@ func distance(e *evidence.Evidence, s *chain.Spacing, id string, given document.
 		}
 	}
 	f = f.Least(rule.Of(counted), rule.Of(need.Value), limits.DistanceMargin).Assume(need.Assumptions...)
-	if f.Verdict != rule.Meets {
+	switch {
+	case f.Verdict == rule.Meets:
+	case assumedOnly(f, limits.DistanceMargin):
+		f.Remedy = confirm
+	default:
 		f.Remedy = alternatives(wider(s, given, need.Value+given.V-counted), lowered(id, x), "lower the voltage")
 	}
 	return f

@@ -22,6 +22,7 @@ var weakest = rule.Rule{
 		Changes: []rule.Change{
 			{Rule: "feedthrough.weakest", Subject: "furnace lead", Verdict: rule.Fails},
 			{Rule: "spacing.clearance", Subject: "furnace lead: air side", Verdict: rule.Fails},
+			{Rule: "spacing.breakdown", Subject: "furnace lead: air side", Verdict: rule.Marginal},
 		},
 	},
 	Judge: func(e *evidence.Evidence) rule.Judgement {

@@ -24,6 +24,27 @@ func alternatives(ways ...string) string {
 	return strings.Join(all, ", or ")
 }
 
+// confirm is what to do about a pass that only its assumptions make marginal.
+const confirm = "confirm what was assumed, by the maker's data or a test"
+
+// assumedOnly reports whether only assumptions keep a finding from being met.
+func assumedOnly(f rule.Finding, margin float64) bool {
+	return f.Verdict == rule.Marginal && f.Margin != nil && quantity.AtLeast(1+*f.Margin, 1+margin) && len(f.Assumptions) > 0
+}
+
+// rounded is the sharpest radius with which a spacing stands a voltage at its distance,
+// where that is more than the one it has.
+func rounded(s *chain.Spacing, x evidence.Spacing, v quantity.Voltage) string {
+	r, err := x.RadiusFor(v)
+	if err != nil || x.Gap.Shape == nil || quantity.AtMost(r, x.Gap.Shape.Sharpest()) {
+		return ""
+	}
+	if f := s.Of; f != nil && f.Sleeve != nil && s.Medium.V == "solid" {
+		return fmt.Sprintf("make feedthrough.pin.radius and the bore %s or more, the wall of the sleeve kept", quantity.Text(r))
+	}
+	return "round the sharper electrode to " + quantity.Text(r)
+}
+
 // resized says which key makes a length and what it must become. A radius of a
 // feedthrough is what its gap leaves it; ribs leave less to the straight length.
 func resized(s *chain.Spacing, given document.Given[quantity.Length], need quantity.Length) string {
@@ -65,9 +86,7 @@ func againstBreakdown(s *chain.Spacing, x evidence.Spacing) string {
 		}
 	}
 	if alternatives(ways...) == "" {
-		if r, err := x.RadiusFor(v); err == nil {
-			ways = append(ways, "round the sharper electrode to "+quantity.Text(r))
-		}
+		ways = append(ways, rounded(s, x, v))
 	}
 	return alternatives(append(ways, medium(x), "lower the voltage")...)
 }

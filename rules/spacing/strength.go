@@ -38,8 +38,11 @@ var breakdown = rule.Rule{
 
 func judgeBreakdown(e *evidence.Evidence, s *chain.Spacing) rule.Finding {
 	f := finding("spacing.breakdown", concern(s), rule.AtMost, s)
-	if s.Clearance.Set() {
+	switch {
+	case s.Clearance.Set():
 		f.Place = s.Clearance.Place
+	case s.Of != nil && s.Creepage.Set():
+		f.Place = s.Creepage.Place
 	}
 	x, err := e.Spacing(s)
 	if err != nil {
@@ -54,7 +57,11 @@ func judgeBreakdown(e *evidence.Evidence, s *chain.Spacing) rule.Finding {
 	f.Because = fmt.Sprintf("%s across a gap expected to break down at %s (%s)", quantity.Text(x.Voltages.Peak), quantity.Text(stands.Value), stands.Because)
 	limit := stands.Value * limits.BreakdownShare
 	f = f.ShareOf(rule.Of(stands.Value)).Most(rule.Of(x.Voltages.Peak), rule.Of(limit), limits.BreakdownShare/limits.BreakdownComfort-1).Assume(stands.Assumptions...)
-	if f.Verdict != rule.Meets {
+	switch {
+	case f.Verdict == rule.Meets:
+	case assumedOnly(f, limits.BreakdownShare/limits.BreakdownComfort-1):
+		f.Remedy = confirm
+	default:
 		f.Remedy = againstBreakdown(s, x)
 	}
 	return f
@@ -104,7 +111,11 @@ func judgeCorona(e *evidence.Evidence, s *chain.Spacing) (rule.Finding, string) 
 	if f.Verdict == rule.Fails {
 		f.Verdict = rule.Marginal
 	}
-	if f.Verdict != rule.Meets {
+	switch {
+	case f.Verdict == rule.Meets:
+	case assumedOnly(f, limits.DistanceMargin):
+		f.Remedy = confirm
+	default:
 		f.Remedy = againstCorona(s, x)
 	}
 	return f, ""

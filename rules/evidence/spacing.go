@@ -102,7 +102,7 @@ func (e *Evidence) gap(s *chain.Spacing) gap.Gap {
 	g.Board, g.Surface = gap.Board(s.Board.V), gap.Surface(s.ElectrodeSurface.V)
 	g.StressedArea, g.OilTest, g.Strength, g.Specimen = s.StressedArea.V, s.OilTest.V, s.Strength.V, s.TestedThickness.V
 	g.Tested = gap.Tested{Voltage: s.TestedVoltage.V, Length: s.TestedLength.V}
-	g.Polished, g.Conditioned = said(s.Finish, "polished"), said(s.Conditioned, true)
+	g.Polished, g.Conditioned = known(s.Finish, "polished"), known(s.Conditioned, true)
 	if r := s.Ribs; r != nil {
 		g.Ribs = gap.Ribs{Count: r.Count.V, Depth: r.Depth.V, Width: r.Width.V}
 	}
@@ -124,8 +124,8 @@ func (e *Evidence) gap(s *chain.Spacing) gap.Gap {
 	return g
 }
 
-// said is whether a key has a value, nil where it was not given.
-func said[T comparable](key document.Given[T], value T) *bool {
+// known is whether a key has a value, nil where it was not given.
+func known[T comparable](key document.Given[T], value T) *bool {
 	if !key.Set() {
 		return nil
 	}

@@ -1,7 +1,6 @@
 package rules
 
 import (
-	"fmt"
 	"strings"
 
 	"kilovet/hv/quantity"
@@ -44,7 +43,7 @@ func coldChecks(p *plan.Plan) exhibit.Table {
 	for _, c := range p.Cold {
 		expected := c.Words
 		if expected == "" {
-			expected = bounds(c.Expected)
+			expected = c.Expected.Text()
 		}
 		t.Rows = append(t.Rows, texts(c.What, c.Across, c.With, expected, ""))
 	}
@@ -81,19 +80,10 @@ func expectations(p *plan.Plan) exhibit.Table {
 		Columns: []exhibit.Column{{Head: "step"}, {Head: "instrument"}, {Head: "expected"}, done}}
 	for _, s := range p.Steps {
 		for _, r := range s.Readings {
-			t.Rows = append(t.Rows, texts(s.Name, r.Instrument, bounds(r.Band), ""))
+			t.Rows = append(t.Rows, texts(s.Name, r.Instrument, r.Text(), ""))
 		}
 	}
 	return t
-}
-
-// bounds writes a value with what it should lie between.
-func bounds(b plan.Band) string {
-	d := quantity.DimensionOf(b.Unit)
-	if quantity.Equal(b.Low, b.High) {
-		return d.Text(b.Value)
-	}
-	return fmt.Sprintf("%s (%s to %s)", d.Text(b.Value), d.Text(b.Low), d.Text(b.High))
 }
 
 func texts(all ...string) []exhibit.Cell {

@@ -34,7 +34,7 @@ func (w *Writer) Line(s string) {
 func (w *Writer) Section(title string, entries int) {
 	if entries > 0 {
 		w.Line("")
-		w.Line(strings.ToUpper(title))
+		w.Hang("", 0, strings.ToUpper(title))
 		w.Line("")
 	}
 }

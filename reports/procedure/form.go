@@ -19,7 +19,12 @@ func Form(p *plan.Plan, h Heading) []byte {
 	fmt.Fprintln(&out, `# Readings of a first power-up. Take away the # before a value and write what was
 # read, with its unit; leave what was not read as it is. The drive of a step is the
 # peak (zero to peak) that was really set.`)
-	fmt.Fprintf(&out, "format      = 1\ndocument    = %s\nrevision    = %s\ndescription = %s\n", quoted(h.Document), quoted(h.Revision), quoted(h.SHA256))
+	fmt.Fprintln(&out, "format      = 1")
+	for _, key := range [...]struct{ key, value string }{{"document   ", h.Document}, {"revision   ", h.Revision}, {"description", h.SHA256}} {
+		if key.value != "" {
+			fmt.Fprintf(&out, "%s = %s\n", key.key, quoted(key.value))
+		}
+	}
 	for i := range p.Steps {
 		formStep(&out, &p.Steps[i])
 	}
@@ -29,7 +34,7 @@ func Form(p *plan.Plan, h Heading) []byte {
 func formStep(out *bytes.Buffer, s *plan.Step) {
 	fmt.Fprintf(out, "\n[[step]]\nname  = %s\ndrive = %s\n", quoted(s.Name), quoted(quantity.Text(s.Peak)))
 	for _, r := range s.Readings {
-		fmt.Fprintf(out, "[[step.reading]]\ninstrument = %s\n# value = %s # expected %s\n", quoted(r.Instrument), quoted("… "+quantity.DimensionOf(r.Unit).SI), Band(r.Band))
+		fmt.Fprintf(out, "[[step.reading]]\ninstrument = %s\n# value = %s # expected %s\n", quoted(r.Instrument), quoted("… "+quantity.DimensionOf(r.Unit).SI), r.Text())
 	}
 }
 

@@ -45,7 +45,7 @@ func rows(w *lines.Writer, all []readings.Row) {
 		if !r.Within {
 			word = "OUTSIDE "
 		}
-		w.Hang("  "+word, 10, fmt.Sprintf("%s: %s, expected %s%s", r.Instrument, quantity.DimensionOf(r.Expected.Unit).Text(r.Read), Band(r.Expected), surplus(r)))
+		w.Hang("  "+word, 10, fmt.Sprintf("%s: %s, expected %s%s", r.Instrument, quantity.DimensionOf(r.Expected.Unit).Text(r.Read), r.Expected.Text(), surplus(r)))
 	}
 }
 

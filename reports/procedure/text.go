@@ -65,16 +65,7 @@ func expected(c plan.Check) string {
 	if c.Words != "" {
 		return c.Words
 	}
-	return Band(c.Expected)
-}
-
-// Band writes a value and its bounds.
-func Band(b plan.Band) string {
-	d := quantity.DimensionOf(b.Unit)
-	if quantity.Equal(b.Low, b.High) {
-		return d.Text(b.Value)
-	}
-	return fmt.Sprintf("%s (%s to %s)", d.Text(b.Value), d.Text(b.Low), d.Text(b.High))
+	return c.Expected.Text()
 }
 
 func step(w *lines.Writer, number int, s *plan.Step) {
@@ -85,7 +76,7 @@ func step(w *lines.Writer, number int, s *plan.Step) {
 	w.Hang("    ", 4, fmt.Sprintf("set the drive to %s, hold for %s; output %s%s, drive power %s",
 		quantity.Text(s.Peak), quantity.Text(s.Dwell), quantity.Text(s.Output), ripple(s), quantity.Text(s.Power)))
 	for _, r := range s.Readings {
-		w.Hang("    ", 4, r.Instrument+": "+Band(r.Band)+"  "+box)
+		w.Hang("    ", 4, r.Instrument+": "+r.Text()+"  "+box)
 	}
 	w.Hang("    ", 4, "after switching off: "+fall(s))
 	w.Line("")

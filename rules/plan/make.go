@@ -155,9 +155,10 @@ func (m *maker) after() {
 	case worst.Never:
 		todo = append(todo, fmt.Sprintf("%s never falls below 60 V by itself: %s stays. Only the rod discharges it.", worst.Node, quantity.Text(worst.Left)))
 	default:
-		todo = append(todo, fmt.Sprintf("Wait %s at least from full voltage (computed to 60 V at %s), and watch the meter fall; never trust a meter alone.", quantity.Text(worst.Time), worst.Node))
+		todo = append(todo, fmt.Sprintf("Wait %s at least from full voltage (computed to 60 V at %s).", quantity.Text(worst.Time), worst.Node))
 	}
-	todo = append(todo, "Rod on the output, the multiplier's top and every column node, one after the other, then leave the earth lead on.")
+	todo = append(todo, "Watch the meter fall, and never trust a meter alone.",
+		"Rod on the output, the multiplier's top and every column node, one after the other, then leave the earth lead on.")
 	if rest, err := m.e.Residue(); err == nil && rest > 60 {
 		todo = append(todo, "An intact ladder keeps up to "+quantity.Text(rest)+": the rod at every column node is not optional.")
 	}

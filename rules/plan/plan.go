@@ -4,6 +4,8 @@
 package plan
 
 import (
+	"fmt"
+
 	"kilovet/hv/quantity"
 	"kilovet/rules/evidence"
 )
@@ -30,6 +32,15 @@ type Band struct {
 // Holds reports whether a value lies between the bounds, with the slack of comparisons.
 func (b Band) Holds(v float64) bool {
 	return quantity.AtLeast(v, b.Low) && quantity.AtMost(v, b.High)
+}
+
+// Text says the value and its bounds.
+func (b Band) Text() string {
+	d := quantity.DimensionOf(b.Unit)
+	if quantity.Equal(b.Low, b.High) {
+		return d.Text(b.Value)
+	}
+	return fmt.Sprintf("%s (%s to %s)", d.Text(b.Value), d.Text(b.Low), d.Text(b.High))
 }
 
 // Check is made with everything switched off, unplugged and earthed first.

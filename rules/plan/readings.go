@@ -3,18 +3,17 @@ package plan
 import (
 	"kilovet/hv/chain"
 	"kilovet/hv/circuit"
-	"kilovet/hv/quantity"
 	"kilovet/rules/evidence"
 )
 
-// The instruments that a description has without naming them.
+// meter is the instrument that a description has without naming it.
 const meter = "divider meter"
 
 // driveShare is how well the peak of the drive is set or read: common practice, no
 // source.
 const driveShare = 0.02
 
-// bodyResistance names the loads that the instruments are.
+// probeName begins the names of the loads that the instruments are.
 const probeName = "instrument "
 
 // Bench is the change of the circuit that connects the described voltmeters.
@@ -111,9 +110,6 @@ func (d dial) band(e *evidence.Evidence, at evidence.Condition) (Band, error) {
 	b.High += b.Value * (wrong + driveShare)
 	return b, err
 }
-
-// setting says in words how the drive is set in a step.
-func setting(peak quantity.Voltage) string { return quantity.Text(peak) + " peak" }
 
 // Values is what every instrument shows under a condition, in the order of Readings
 // and in SI units, without bounds.

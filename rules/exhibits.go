@@ -33,7 +33,7 @@ func tables(e *evidence.Evidence) []exhibit.Table {
 		spotTable,
 		leftOut,
 		distances,
-		arcTables,
+		events,
 		powerUp,
 	)
 }

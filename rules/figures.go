@@ -143,4 +143,6 @@ func once(c *collector, e *evidence.Evidence) {
 	}
 	of(c, "stored.residue", "", "hv.steady", e.Residue)
 	of(c, "multiplier.rise_time", "", evidence.Basis, e.RiseTime)
+	starts(c, e)
+	loadSteps(c, e)
 }

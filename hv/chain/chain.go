@@ -77,6 +77,7 @@ type Drive struct {
 	PeakLimit  document.Given[quantity.Voltage]    `key:"peak_limit" range:"> 0 V, <= 1 MV" means:"the most the peak can reach if regulation is lost" example:"2.1 kV"`
 	Resistance document.Given[quantity.Resistance] `key:"resistance" range:">= 0 ohm, <= 1 Gohm" means:"in series with the source" example:"900 ohm"`
 	Inductance document.Given[quantity.Inductance] `key:"inductance" range:">= 0 H, <= 1 kH" means:"leakage inductance, in series" example:"0 H"`
+	Ramp       document.Given[quantity.Time]       `key:"ramp" range:"> 0 s, <= 1 h" means:"time over which the drive rises after switching on (default: at once)" example:"2 s"`
 	Unbalance  document.Given[quantity.Fraction]   `key:"unbalance" range:">= 0 %, <= 100 %" means:"amplitude mismatch of the halves of a symmetrical drive" example:"2 %"`
 }
 

@@ -25,6 +25,7 @@ type envelope struct {
 	spare   *track
 	ahead   float64 // γH of the equations in hand
 	hurried bool    // time does not matter
+	way     float64 // length of the way, where that and not the state itself is the measure
 }
 
 func newEnvelope(s *shooter) *envelope {
@@ -62,6 +63,9 @@ func (e *envelope) advance(most float64) error {
 			return err
 		}
 		limit := deviation * (norm(e.x) + e.pace.energy)
+		if e.way > 0 {
+			limit = deviation * e.way
+		}
 		if e.hurried {
 			limit = detour * e.leap * norm(e.start)
 		}

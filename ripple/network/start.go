@@ -111,8 +111,14 @@ func (r *rise) stair(part float64) (*envelope, error) {
 		for i := range h.x {
 			h.x[i] = 0
 		}
-		r.ledger = newLedger(s)
 	}
+	// Voltages across what hangs on a source rest on its amplitude: each stair has its own
+	// ledger, which goes on where the last one ended.
+	next := newLedger(s)
+	if r.ledger != nil {
+		next.of, next.last = r.ledger.of, r.ledger.last
+	}
+	r.ledger = next
 	h.judge(passed)
 	return newEnvelope(h), nil
 }

@@ -84,6 +84,13 @@ func TestRamp(t *testing.T) {
 	if d := float64(s.Reached)/0.095 - 1; math.Abs(d) > 0.01 {
 		t.Errorf("up after %v on a ramp of 100 ms", s.Reached)
 	}
+	// Behind a stiff source the first capacitor takes the source's own voltage.
+	if v := s.Of("drive.source").Greatest; v < 0.9*1000 || v > 1000 {
+		t.Errorf("the source reached %v on its ramp to 1 kV", v)
+	}
+	if i := s.Of("drive.source").Peak; i > 2*s.Of("multiplier.diode.1").Peak {
+		t.Errorf("the source gave %v, the first diode took %v", i, s.Of("multiplier.diode.1").Peak)
+	}
 	inrush, err := Start(p, StartOptions{Node: node(t, p.Circuit, "multiplier")})
 	if err != nil {
 		t.Fatal(err)

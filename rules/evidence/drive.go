@@ -1,11 +1,10 @@
 package evidence
 
 import (
-	"math"
-
 	"kilovet/hv/circuit"
 	"kilovet/hv/lack"
 	"kilovet/hv/quantity"
+	"kilovet/hv/steady"
 	"kilovet/ripple/network"
 )
 
@@ -76,63 +75,44 @@ func (e *Evidence) trial() (trial, error) {
 	})
 }
 
+// HeldBetween are the least and the most that the sensed node may really stand at while
+// regulation reads its set voltage: the divider reads high or low by its error.
+func (e *Evidence) HeldBetween() (least, most quantity.Voltage, err error) {
+	if e.chain.Regulation == nil {
+		return 0, 0, lack.Key("regulation")
+	}
+	wrong, err := e.DividerError()
+	if err != nil {
+		return 0, 0, err
+	}
+	return steady.Misread(e.chain.Regulation.Set.V, wrong)
+}
+
 // held is the voltage that regulation really holds at the sensed node.
 func (e *Evidence) held() (quantity.Voltage, error) {
-	set := e.chain.Regulation.Set.V
 	if e.condition.Corner == Nominal {
-		return set, nil
+		return e.chain.Regulation.Set.V, nil
 	}
 	nominal := e.condition
 	nominal.Corner = Nominal
-	wrong, err := e.Under(nominal).DividerError()
-	return set / quantity.Voltage(1-wrong), err
+	_, most, err := e.Under(nominal).HeldBetween()
+	return most, err
 }
 
-// peakFor finds the peak for a mean at the sensed node by the secant method; the
-// mean is all but proportional to the peak.
+// peakFor finds the peak for a mean at the sensed node.
 func (e *Evidence) peakFor(set quantity.Voltage) (trial, error) {
-	const good, tries = 1e-8, 12
-	node := e.chain.Divider.Senses.Or("output")
-	a := e.chain.Drive.Peak.V
-	va, near, err := e.meanAt(a, node, e.alike())
-	if err != nil {
-		return trial{}, err
-	}
-	if va <= 0 {
-		return trial{}, lack.Failed("the load pulls %s to nothing at full drive", node)
-	}
-	b := a * set / va
-	for range tries {
-		vb, at, err := e.meanAt(b, node, near)
-		if err != nil {
-			return trial{}, err
-		}
-		if quantity.AtMost(math.Abs(float64(vb/set-1)), good) {
-			return trial{b, at}, nil
-		}
-		if quantity.Equal(vb, va) {
-			break
-		}
-		a, b, va, near = b, b+(set-vb)*(b-a)/(vb-va), vb, at
-	}
-	return trial{}, lack.Failed("no drive was found that holds %s at %s", quantity.Text(set), node)
-}
-
-// meanAt is the magnitude of a node's mean for a trial peak, and the state it was read from.
-func (e *Evidence) meanAt(peak quantity.Voltage, node string, from *network.Periodic) (quantity.Voltage, *network.Periodic, error) {
-	c, err := e.circuitAt(peak)
-	if err != nil {
-		return 0, nil, err
-	}
-	p, err := e.solve(c, from)
-	if err != nil {
-		return 0, nil, err
-	}
-	s, err := p.between(node, "ground")
-	if c.Negative {
-		s.Mean = -s.Mean
-	}
-	return s.Mean, p.Periodic, err
+	peak, at, err := network.Hold(network.HoldOptions{
+		Node: e.chain.Divider.Senses.Or("output"), Set: set, First: e.chain.Drive.Peak.V,
+		Options: network.Options{Frequency: e.chain.Drive.Frequency.V, From: e.alike()},
+		Build: func(peak quantity.Voltage) (*circuit.Circuit, error) {
+			c, err := e.circuitAt(peak)
+			if err != nil {
+				return nil, err
+			}
+			return trusted(c), nil
+		},
+	})
+	return trial{peak, at}, err
 }
 
 // Circuit is the circuit under the condition.

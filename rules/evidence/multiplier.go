@@ -240,35 +240,6 @@ func (e *Evidence) InputPower() (quantity.Power, error) {
 	return s.InputPower(), nil
 }
 
-// RiseTime is from discharged to 95 % of the final mean at the top of the multiplier,
-// at full drive with the loads on and without regulation.
-func (e *Evidence) RiseTime() (quantity.Time, error) {
-	s, err := e.Start()
-	if err != nil {
-		return 0, err
-	}
-	return s.Reached, nil
-}
-
-// Start is the start at full drive, without regulation, and what the parts bear in it.
-func (e *Evidence) Start() (*network.Startup, error) {
-	return remember(e, "start", func() (*network.Startup, error) {
-		c, err := e.circuitAt(e.chain.Drive.Peak.V)
-		if err != nil {
-			return nil, err
-		}
-		p, err := e.solve(c, nil)
-		if err != nil {
-			return nil, err
-		}
-		top, err := p.node("multiplier")
-		if err != nil {
-			return nil, err
-		}
-		return network.Start(p.Periodic, network.StartOptions{Node: top})
-	})
-}
-
 // StateAssumptions are what the steady state takes for granted.
 func (e *Evidence) StateAssumptions() []string {
 	var all []string

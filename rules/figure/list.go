@@ -158,6 +158,16 @@ var List = []Declaration{
 	{"stored.left", "V", true, "largest voltage that stays on a node with one part open", "part"},
 	{"stored.residue", "V", false, "what an intact ladder keeps: (2 N − 1) forward drops", ""},
 
+	{"step.removed", "V", false, "mean at the output when the emission has stopped and the drive stays where it was", ""},
+	{"step.settling", "s", false, "from the end of the emission to 95 % of the way there", ""},
+	{"step.applied", "V", false, "mean at the output when the emission has set in and the drive stays where it was without", ""},
+	{"regulation.least", "V", false, "least that the sensed node may stand at while its divider reads the set voltage", ""},
+	{"regulation.most", "V", false, "most that the sensed node may stand at while its divider reads the set voltage", ""},
+
+	{"start.ramped_rise_time", "s", false, "from discharged, the drive on its ramp, to 95 % of the final mean", ""},
+	{"start.part_voltage", "V", false, "largest voltage on a part on the way up, full drive at once", "part"},
+	{"start.part_current", "A", false, "largest current of a part on the way up, full drive at once", "part"},
+
 	{"arc.charge", "C", true, "stored charge that passes through an arc to ground, regulation lost", "node"},
 	{"arc.energy", "J", true, "stored energy that the arc itself turns into heat", "node"},
 	{"arc.ceases", "s", true, "until the current of the arc stays below 1 mA, drive on", "node"},

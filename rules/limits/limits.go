@@ -29,6 +29,7 @@ var (
 	ResistorVoltage   = Derating{0.80, 0.90, practice("resistor voltage at most 90 % of rating, 80 % for comfort")}
 	ResistorPower     = Derating{0.50, 0.70, practice("resistor power at most 70 % of the rating at its ambient, 50 % for comfort; rating falls linearly from 70 to 155 degC")}
 	InsulationVoltage = Derating{0.80, 1.00, practice("working voltage at most the rating of an insulating part, 80 % for comfort")}
+	StartVoltage      = Derating{0.90, 1.00, practice("voltages of a start, a rare event, at most the rating, 90 % for comfort")}
 	SinglePulse       = Derating{0.80, 1.00, practice("a single arc at most the single-pulse rating, 80 % for comfort")}
 )
 

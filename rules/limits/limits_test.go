@@ -61,6 +61,7 @@ func TestDeratingsAreThoseStated(t *testing.T) {
 		{"resistor voltage", limits.ResistorVoltage, 0.80, 0.90},
 		{"resistor power", limits.ResistorPower, 0.50, 0.70},
 		{"insulation", limits.InsulationVoltage, 0.80, 1.00},
+		{"start voltage", limits.StartVoltage, 0.90, 1.00},
 		{"single pulse", limits.SinglePulse, 0.80, 1.00},
 	} {
 		if float64(c.d.Marginal) != c.marginal || float64(c.d.Fails) != c.fails || c.d.Source.Mark != rule.Practice {

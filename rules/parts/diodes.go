@@ -62,8 +62,11 @@ var diodeSurge = rule.Rule{
 	Concern: rule.Equipment,
 	Sources: []rule.Source{limits.DiodeSurge.Source},
 	Example: rule.Example{
-		Swaps:   []rule.Swap{{Was: `surge_current = "3 A"`, Becomes: `surge_current = "50 mA"`}},
-		Changes: []rule.Change{{Rule: "diode.surge_current", Subject: "multiplier.diode", Verdict: rule.Fails}},
+		Swaps: []rule.Swap{{Was: `surge_current = "3 A"`, Becomes: `surge_current = "50 mA"`}},
+		Changes: []rule.Change{
+			{Rule: "diode.surge_current", Subject: "multiplier.diode", Verdict: rule.Fails},
+			{Rule: "start.diode_current", Subject: "multiplier.diode", Verdict: rule.Fails},
+		},
 	},
 	Judge: func(e *evidence.Evidence) rule.Judgement {
 		return each(groups(e, hasDiodePart), "no multiplier diode is described", func(g group) rule.Finding {

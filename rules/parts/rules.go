@@ -8,7 +8,7 @@ import (
 // Rules lists the rules of this family.
 func Rules() []rule.Rule {
 	return []rule.Rule{
-		capacitorVoltage, capacitorDielectric, diodeReverse, diodeCurrent, diodeRecovery, diodeSurge,
+		capacitorVoltage, capacitorDielectric, diodeReverse, diodeCurrent, diodeRecovery, diodeSurge, startCurrent, startVoltage,
 		resistorVoltage, resistorPower, arcVoltage, arcEnergy, gapStrikes, cableVoltage, feedVoltage, feedTest,
 	}
 }

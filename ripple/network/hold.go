@@ -1,0 +1,72 @@
+package network
+
+import (
+	"math"
+
+	"kilovet/hv/circuit"
+	"kilovet/hv/lack"
+	"kilovet/hv/quantity"
+)
+
+// HoldOptions say what is to be held at what voltage.
+type HoldOptions struct {
+	// Build gives the circuit at a peak of its drive.
+	Build func(peak quantity.Voltage) (*circuit.Circuit, error)
+	Node  string
+	Set   quantity.Voltage // magnitude of the node's mean, with the polarity of the multiplier
+	First quantity.Voltage // a peak to begin with
+	Options
+}
+
+// Hold finds the peak of the drive at which the mean of a node is a set voltage, within a
+// part in 1e8, and the state there, by the secant method: the mean is all but proportional
+// to the peak. It is a lack where the load pulls the node to nothing, where there is no
+// such node, and where no peak is found in a dozen trials.
+func Hold(o HoldOptions) (quantity.Voltage, *Periodic, error) {
+	const good, tries = 1e-8, 12
+	a := o.First
+	va, near, err := o.try(a)
+	if err != nil {
+		return 0, nil, err
+	}
+	if va <= 0 {
+		return 0, nil, lack.Failed("the load pulls %s to nothing at %s of drive", o.Node, quantity.Text(a))
+	}
+	b := a * o.Set / va
+	for range tries {
+		o.From = near
+		vb, at, err := o.try(b)
+		if err != nil {
+			return 0, nil, err
+		}
+		if quantity.AtMost(math.Abs(float64(vb/o.Set-1)), good) {
+			return b, at, nil
+		}
+		if quantity.Equal(vb, va) {
+			break
+		}
+		a, b, va, near = b, b+(o.Set-vb)*(b-a)/(vb-va), vb, at
+	}
+	return 0, nil, lack.Failed("no drive was found that holds %s at %s", o.Node, quantity.Text(o.Set))
+}
+
+// try is the mean of the node at a peak, and the state it was read from.
+func (o *HoldOptions) try(peak quantity.Voltage) (quantity.Voltage, *Periodic, error) {
+	c, err := o.Build(peak)
+	if err != nil {
+		return 0, nil, err
+	}
+	n, there := c.Node(o.Node)
+	if !there {
+		return 0, nil, lack.Failed("there is no node %s", o.Node)
+	}
+	p, err := Steady(c, o.Options)
+	if err != nil {
+		return 0, nil, err
+	}
+	s, err := p.At(n)
+	if c.Negative {
+		s.Mean = -s.Mean
+	}
+	return s.Mean, p, err
+}

@@ -15,8 +15,10 @@ func basisCommand(w world) *cobra.Command {
 	return &cobra.Command{
 		Use:   "basis [RULE]",
 		Short: "List the rules, or show what one of them rests on",
-		Args:  cobra.MaximumNArgs(1),
-		RunE:  func(_ *cobra.Command, args []string) error { return w.basis(args) },
+		Example: `  kilovet basis                        every rule, by what is at stake
+  kilovet basis spacing.creepage       what one demands, its sources, an example`,
+		Args: cobra.MaximumNArgs(1),
+		RunE: func(_ *cobra.Command, args []string) error { return w.basis(args) },
 		ValidArgsFunction: func(*cobra.Command, []string, string) ([]string, cobra.ShellCompDirective) {
 			return ids(rules.All()), cobra.ShellCompDirectiveNoFileComp
 		},

@@ -24,6 +24,9 @@ func compareCommand(w world) *cobra.Command {
 	command := &cobra.Command{
 		Use:   "compare OLD.toml NEW.toml",
 		Short: "Show what a change of the description does: inputs, figures, verdicts",
+		Example: `  kilovet compare old.toml new.toml            what moved and what changed
+  kilovet compare --all old.toml new.toml      every figure that moved
+  kilovet compare --json - old.toml new.toml   for other programs`,
 		Long: `Review two descriptions and show what differs: inputs, figures beyond a
 millionth, verdicts. - reads one of them from standard input.
 

@@ -10,10 +10,11 @@ import (
 
 func draftCommand(w world) *cobra.Command {
 	return &cobra.Command{
-		Use:   "draft",
-		Short: "Write a description to fill in, with every key explained",
-		Args:  cobra.NoArgs,
-		RunE:  func(*cobra.Command, []string) error { return w.draft() },
+		Use:     "draft",
+		Short:   "Write a description to fill in, with every key explained",
+		Example: `  kilovet draft > chain.toml`,
+		Args:    cobra.NoArgs,
+		RunE:    func(*cobra.Command, []string) error { return w.draft() },
 	}
 }
 

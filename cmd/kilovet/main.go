@@ -104,6 +104,7 @@ func root(w world) *cobra.Command {
 		Use:           "kilovet",
 		Short:         "Reviews a high-voltage supply chain before first power-up",
 		Long:          about,
+		Example:       begin,
 		Version:       version(),
 		SilenceErrors: true,
 		SilenceUsage:  true,
@@ -113,10 +114,18 @@ func root(w world) *cobra.Command {
 	command.SetIn(w.in)
 	command.SetOut(w.out)
 	command.SetErr(w.err)
-	command.AddCommand(reviewCommand(w), basisCommand(w), draftCommand(w), schemaCommand(w), compareCommand(w), showCommand(w), spacingCommand(w), planCommand(w), readingsCommand(w))
+	command.AddCommand(reviewCommand(w), basisCommand(w), draftCommand(w), schemaCommand(w), compareCommand(w), showCommand(w), spacingCommand(w), planCommand(w), readingsCommand(w), manualCommand(w))
+	command.SetHelpFunc(func(c *cobra.Command, _ []string) { w.help(c) })
 	plainly(command)
 	return command
 }
+
+const begin = `  kilovet review                               the built-in example
+  kilovet draft > chain.toml                   a description to fill in
+  kilovet review chain.toml                    what stands against switching on
+  kilovet review --pdf review.pdf chain.toml   sheets to read, file and sign
+  kilovet show chain.toml                      a page that follows the file
+  kilovet basis                                the rules`
 
 const about = `kilovet reads the description of a high-voltage supply chain, computes what will
 happen when it is switched on, judges that against named rules, and writes a

@@ -41,11 +41,12 @@ type kind struct{ name, begins string }
 var (
 	sheets  = kind{"PDF", "%PDF-"}
 	results = kind{"JSON of kilovet", `{"contract":`}
+	manuals = kind{"manual page of kilovet", manualBegins}
 	pages   = kind{"page of kilovet", "<!DOCTYPE html>\n<html lang=\"en\" data-made-by=\"kilovet\">"}
 )
 
 func kindOf(data []byte) kind {
-	for _, k := range []kind{sheets, pages} {
+	for _, k := range []kind{sheets, pages, manuals} {
 		if bytes.HasPrefix(data, []byte(k.begins)) {
 			return k
 		}

@@ -24,9 +24,9 @@ func planCommand(w world) *cobra.Command {
 		Short: "Plan the first power-up: cold checks, steps, expected readings",
 		Long: `Plan the first power-up of a chain, every step computed.
 
-  kilovet plan chain.toml                           the plan, with boxes to fill in
-  kilovet plan --readings day1.toml chain.toml      and a form for what is read
-  kilovet readings chain.toml day1.toml             what the readings say
+  kilovet plan chain.toml                       the plan, with boxes to fill in
+  kilovet plan --readings day1.toml chain.toml  and a form for what is read
+  kilovet readings chain.toml day1.toml         what the readings say
 
 Exit status: 0 planned; 1 something could not be planned, and the plan says
 what; 2 the description or the command line cannot be used; 3 a file could not

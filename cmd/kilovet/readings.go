@@ -18,8 +18,8 @@ func readingsCommand(w world) *cobra.Command {
 deviation points to: every fault and error of assembly is computed at the steps
 that were read.
 
-  kilovet plan --readings day1.toml chain.toml      make the form, then fill it in
-  kilovet readings chain.toml day1.toml             what it says
+  kilovet plan --readings day1.toml chain.toml  make the form, then fill it in
+  kilovet readings chain.toml day1.toml         what it says
 
 Exit status: 0 every reading lies within its bounds; 1 one does not, or nothing
 was read; 2 a file or the command line cannot be used, or the readings belong to

@@ -16,10 +16,6 @@ import (
 	"kilovet"
 	"kilovet/hv/chain"
 	"kilovet/reports/digest"
-	"kilovet/reports/html"
-	"kilovet/reports/json"
-	"kilovet/reports/page"
-	"kilovet/reports/pdf"
 	"kilovet/reports/text"
 	"kilovet/rules"
 	"kilovet/rules/rule"
@@ -40,11 +36,12 @@ type reviewing struct {
 func reviewCommand(w world) *cobra.Command {
 	r := &reviewing{world: w}
 	command := &cobra.Command{
-		Use:   "review [CHAIN.toml]",
-		Short: "Review a description: text, a PDF to sign, JSON",
-		Long:  aboutReview,
-		Args:  cobra.MaximumNArgs(1),
-		RunE:  func(_ *cobra.Command, args []string) error { return r.run(args) },
+		Use:     "review [CHAIN.toml]",
+		Short:   "Review a description: text, a PDF to sign, JSON",
+		Long:    aboutReview,
+		Example: reviewExamples,
+		Args:    cobra.MaximumNArgs(1),
+		RunE:    func(_ *cobra.Command, args []string) error { return r.run(args) },
 		ValidArgsFunction: func(*cobra.Command, []string, string) ([]string, cobra.ShellCompDirective) {
 			return []string{"toml"}, cobra.ShellCompDirectiveFilterFileExt
 		},
@@ -61,18 +58,18 @@ func reviewCommand(w world) *cobra.Command {
 
 const aboutReview = `Review a description: what will happen, judged by named rules.
 
-  kilovet review chain.toml                    one screen
+Exit status: 0 nothing fails and nothing is unassessed; 1 something does; 2 the
+description or the command line cannot be used, and nothing was written; 3 a
+file could not be read or written; 4 the program itself failed.`
+
+const reviewExamples = `  kilovet review chain.toml                    one screen
   kilovet review --all chain.toml              every figure, finding and source
   kilovet review --pdf review.pdf chain.toml   sheets to read, file and sign
   kilovet review --html page.html chain.toml   one page for the browser
   kilovet review --json - chain.toml           results for other programs
-  kilovet review --local house.toml chain.toml under stricter limits of a local code
+  kilovet review --local house.toml chain.toml under a stricter local code
   kilovet review -                             a description on standard input
-  kilovet review                               the built-in example
-
-Exit status: 0 nothing fails and nothing is unassessed; 1 something does; 2 the
-description or the command line cannot be used, and nothing was written; 3 a
-file could not be read or written; 4 the program itself failed.`
+  kilovet review                               the built-in example`
 
 // builtIn stands first on a review that nobody asked for by name.
 const builtIn = "Built-in example: no file was named"
@@ -188,87 +185,11 @@ func (s source) sum() string {
 	return hex.EncodeToString(sum[:])
 }
 
-// render makes every output before any of them is written; the note stands first.
-func (r *reviewing) render(review *rules.Review, note string) (outputs []output, shown []byte, err error) {
-	data, err := json.Render(review)
-	if err != nil {
-		return nil, nil, defect(err)
-	}
-	if r.pdf != "" {
-		sheets, err := pdf.RenderOn(pdf.Paper(r.paper), page.New(review).Noted(note))
-		if err != nil {
-			return nil, nil, defect(err)
-		}
-		outputs = append(outputs, output{r.pdf, sheets})
-	}
-	if r.html != "" {
-		page, err := html.RenderWith(review, html.Options{Note: note})
-		if err != nil {
-			return nil, nil, defect(err)
-		}
-		outputs = append(outputs, output{r.html, page})
-	}
-	if r.json == "-" {
-		return outputs, data, nil
-	}
-	if r.json != "" {
-		outputs = append(outputs, output{r.json, data})
-	}
-	how := r.manner(r.all)
-	how.Note = note
-	return outputs, text.Render(review, how), nil
-}
-
 // manner is how text is to be written: colour only on a terminal that does not
 // refuse it, and lines no longer than can be read.
 func (w world) manner(all bool) text.Options {
 	columns := w.columns()
 	return text.Options{All: all, Colour: columns > 0 && w.env("NO_COLOR") == "", Width: min(columns, 100)}
-}
-
-// writable refuses outputs before anything is computed: sheets on standard output, and
-// what would take the place of something else.
-func (r *reviewing) writable(args []string) error {
-	if err := r.sheetsUsable(); err != nil {
-		return err
-	}
-	if err := r.distinct(args); err != nil {
-		return err
-	}
-	for _, o := range []struct {
-		path string
-		kind kind
-	}{{r.pdf, sheets}, {r.html, pages}} {
-		if o.path == "" {
-			continue
-		}
-		if err := spares(o.path, o.kind); err != nil {
-			return err
-		}
-	}
-	if r.json != "" && r.json != "-" {
-		return spares(r.json, results)
-	}
-	return nil
-}
-
-// distinct refuses outputs that would overwrite each other or the description.
-func (r *reviewing) distinct(args []string) error {
-	paths := slices.DeleteFunc([]string{r.pdf, r.html, r.json}, func(p string) bool { return p == "" || p == "-" })
-	if len(args) == 1 && args[0] != "-" {
-		paths = append(paths, args[0])
-	}
-	if r.local != "" && r.local != "-" {
-		paths = append(paths, r.local)
-	}
-	for i, p := range paths {
-		for _, q := range paths[:i] {
-			if same(p, q) {
-				return exitf(unusable, "%s is named twice; give every file a name of its own", p)
-			}
-		}
-	}
-	return nil
 }
 
 // required reads the concerns of --require.

@@ -11,10 +11,11 @@ import (
 
 func schemaCommand(w world) *cobra.Command {
 	return &cobra.Command{
-		Use:   "schema",
-		Short: "Write the JSON Schema of a description, for editors",
-		Args:  cobra.NoArgs,
-		RunE:  func(*cobra.Command, []string) error { return w.schema() },
+		Use:     "schema",
+		Short:   "Write the JSON Schema of a description, for editors",
+		Example: `  kilovet schema > chain.schema.json`,
+		Args:    cobra.NoArgs,
+		RunE:    func(*cobra.Command, []string) error { return w.schema() },
 	}
 }
 

@@ -33,6 +33,8 @@ func showCommand(w world) *cobra.Command {
 	command := &cobra.Command{
 		Use:   "show CHAIN.toml",
 		Short: "Show a description's review in the browser, anew whenever it is saved",
+		Example: `  kilovet show chain.toml              says the address to open
+  kilovet show --port 8123 chain.toml  at a port of your own`,
 		Long: `Serve the review of a description as a page to this computer alone. The page
 follows the file: it is made anew whenever the file is saved, and shows faults
 at their lines. It ends with Ctrl+C.`,

@@ -94,13 +94,13 @@ func homes() map[string]exhibit.Chapter {
 func chapterOf(id string) exhibit.Chapter {
 	first, _, _ := strings.Cut(id, ".")
 	switch first {
-	case "multiplier", "output", "drive", "supply", "regulation", "filter":
+	case "multiplier", "output", "drive", "supply", "regulation", "filter", "source", "loss":
 		return exhibit.Multiplier
-	case "cathode", "bias", "gun", "beam", "heater":
+	case "cathode", "bias", "gun", "beam", "heater", "path":
 		return exhibit.Beam
 	case "spacing", "vacuum", "field", "gap", "gas", "feedthrough":
 		return exhibit.Spacings
-	case "part", "divider", "rating", "cable", "feed", "resistor", "capacitor", "diode", "series":
+	case "part", "divider", "rating", "cable", "feed", "resistor", "capacitor", "diode", "series", "arc":
 		return exhibit.Parts
 	case "stored", "access", "touch", "discharge", "rod", "xray", "bleeder", "protection":
 		return exhibit.Energy

@@ -20,7 +20,7 @@ func Value(v float64, unit string) string {
 // CurveWords says what a curve shows, for those who do not see it and where nothing can
 // be drawn: what is laid off over what, and from where to where each line goes.
 func CurveWords(c exhibit.Curve) string {
-	parts := []string{fmt.Sprintf("%s over %s.", capital(c.Y.What), c.X.What)}
+	parts := []string{fmt.Sprintf("%s over %s.", Capital(c.Y.What), c.X.What)}
 	for _, l := range c.Lines {
 		if len(l.Points) > 0 {
 			parts = append(parts, lineWords(c, l))
@@ -54,8 +54,8 @@ func lineWords(c exhibit.Curve, l exhibit.Line) string {
 		Value(low.Y, c.Y.Unit), Value(low.X, c.X.Unit), Value(high.Y, c.Y.Unit), Value(high.X, c.X.Unit))
 }
 
-// capital begins with a capital.
-func capital(text string) string {
+// Capital begins with a capital.
+func Capital(text string) string {
 	if text == "" {
 		return text
 	}

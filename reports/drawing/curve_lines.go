@@ -1,7 +1,9 @@
 package drawing
 
 import (
+	"cmp"
 	"math"
+	"slices"
 	"strconv"
 
 	"gonum.org/v1/plot/vg"
@@ -67,20 +69,60 @@ func (p *plot) lineTag(i int) string {
 	return strconv.Itoa(i + 1)
 }
 
-// numberLine puts the number of a line onto it, where no other tag stands.
+// numberLine puts the number of a line onto it, as far from the other lines as can be,
+// and where no other tag stands.
 func (p *plot) numberLine(i int, l exhibit.Line) {
 	tag := p.lineTag(i)
-	if tag == "" || len(l.Points) == 0 {
+	if tag == "" {
 		return
 	}
-	first := len(l.Points) * (2*i + 1) / (2 * len(p.Lines))
-	step := max(1, len(l.Points)/24)
-	for n := 0; n < len(l.Points); n += step {
-		k := (first + n) % len(l.Points)
-		if p.tagAt(p.place(l.Points[k]), tag) {
+	others := p.others(i)
+	type candidate struct {
+		at
+		clear float64
+	}
+	var all []candidate
+	for _, q := range p.spread(l, 24, (2*i+1)*12/len(p.Lines)) {
+		all = append(all, candidate{q, nearest(q, others)})
+	}
+	slices.SortStableFunc(all, func(a, b candidate) int { return cmp.Compare(b.clear, a.clear) })
+	for _, c := range all {
+		if p.tagAt(c.at, tag) {
 			return
 		}
 	}
+}
+
+// spread is the places of about so many points along a line, beginning with one of
+// them.
+func (p *plot) spread(l exhibit.Line, count, first int) []at {
+	var all []at
+	step := max(1, len(l.Points)/count)
+	for n := 0; n < len(l.Points); n += step {
+		all = append(all, p.place(l.Points[(first*step+n)%len(l.Points)]))
+	}
+	return all
+}
+
+// others is where the other lines go.
+func (p *plot) others(i int) []at {
+	var all []at
+	for j, l := range p.Lines {
+		if j != i {
+			all = append(all, p.spread(l, 80, 0)...)
+		}
+	}
+	return all
+}
+
+// nearest is the distance to the nearest of some places; beyond enough all are alike.
+func nearest(q at, others []at) float64 {
+	const enough = 7.0
+	least := enough
+	for _, o := range others {
+		least = min(least, math.Hypot(q.x-o.x, q.y-o.y))
+	}
+	return math.Round(least*2) / 2
 }
 
 // mark draws a mark: a ring with its letter beside it.

@@ -2,7 +2,6 @@ package page
 
 import (
 	"fmt"
-	"slices"
 	"strings"
 
 	"kilovet/reports/digest"
@@ -103,7 +102,7 @@ func caption(title, subject, basis, note string) string {
 	}
 	text := title + "."
 	if note != "" {
-		text += " " + strings.TrimSuffix(note, ".") + "."
+		text += " " + digest.Capital(strings.TrimSuffix(note, ".")) + "."
 	}
 	if basis != "" {
 		text += " Basis: " + basis + "."
@@ -162,31 +161,10 @@ func (n *writer) tables(c digest.Chapter) []Block {
 func tableNote(t exhibit.Table) string {
 	text := ""
 	if t.Note != "" {
-		text = strings.TrimSuffix(t.Note, ".") + ". "
+		text = digest.Capital(strings.TrimSuffix(t.Note, ".")) + ". "
 	}
 	if t.Basis != "" {
 		text += "Basis: " + t.Basis + "."
 	}
 	return text
-}
-
-// columns shares the width of a table by how long its texts are.
-func columns(t exhibit.Table) []Column {
-	const least, most = 7, 34 // runes
-	lengths := make([]int, len(t.Columns))
-	sum := 0
-	for i, c := range t.Columns {
-		lengths[i] = len([]rune(c.Head))
-		for _, row := range t.Rows {
-			lengths[i] = max(lengths[i], len([]rune(digest.Cell(c.Unit, row[i].Value, row[i].Text))))
-		}
-		lengths[i] = min(max(lengths[i], least), most)
-		sum += lengths[i]
-	}
-	var all []Column
-	for i, c := range t.Columns {
-		numbers := !slices.ContainsFunc(t.Rows, func(row []exhibit.Cell) bool { return row[i].Value == nil && row[i].Text != "" })
-		all = append(all, Column{Title: c.Head, Share: float64(lengths[i]) / float64(sum), Right: numbers && c.Unit != ""})
-	}
-	return all
 }

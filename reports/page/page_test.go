@@ -173,7 +173,7 @@ func names(r *rules.Review) []string {
 		}
 	}
 	for _, c := range r.Curves {
-		all = append(all, "curve "+c.ID, c.Title, c.Note, c.Basis)
+		all = append(all, "curve "+c.ID, c.Title, strings.TrimPrefix(c.Note, "i"), c.Basis)
 	}
 	for _, t := range r.Tables {
 		all = append(all, t.Title, t.Basis)

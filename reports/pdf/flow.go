@@ -103,6 +103,9 @@ func (w *flow) first(blocks []page.Block) float64 {
 	if g, ok := blocks[0].(page.Gallery); ok && len(g.Figures) > 0 {
 		return w.firstRow(g) + 4
 	}
+	if t, ok := blocks[0].(page.Table); ok && len(t.Rows) > 0 && !t.Fill {
+		return min(w.tableStart(t)+6, (w.bottom-w.top)/3)
+	}
 	return keep
 }
 

@@ -32,6 +32,14 @@ func (w *flow) table(t page.Table) {
 	w.y += 1
 }
 
+// tableStart is the height of what must stay together at the beginning of a table:
+// title, heads of the columns and the first row.
+func (w *flow) tableStart(t page.Table) float64 {
+	title := append(w.wrap(strong, t.Title, w.across), w.wrap(small, t.Note, w.across)...)
+	t.Rows = t.Rows[:min(2, len(t.Rows))]
+	return height(title) + 11 + together(w.tableRows(t, func() {}), 0)
+}
+
 // filled is the table cut to the rows that the sheet holds beside what follows it, at
 // least one, with a row that counts the others.
 func (w *flow) filled(t page.Table, after float64) page.Table {
@@ -78,7 +86,7 @@ func (w *flow) tableRows(t page.Table, head func()) []row {
 	var group row
 	for i, r := range t.Rows {
 		alone := i+1 == len(t.Rows) || !t.Rows[i+1].Under
-		set := row{cells: w.tableCells(t.Columns, r), pad: 0.7, ruled: !r.Group || alone, again: head, group: r.Group, to: r.Anchor}
+		set := row{cells: w.tableCells(t.Columns, r), pad: padding(r), ruled: !r.Group || alone, again: head, group: r.Group, to: r.Anchor}
 		if r.Group {
 			group = set
 		}
@@ -88,6 +96,14 @@ func (w *flow) tableRows(t page.Table, head func()) []row {
 		rows = append(rows, set)
 	}
 	return rows
+}
+
+// padding sets rows that belong together closer.
+func padding(r page.Row) float64 {
+	if r.Under {
+		return 0.35
+	}
+	return 0.7
 }
 
 func (w *flow) tableCells(columns []page.Column, r page.Row) []rowCell {

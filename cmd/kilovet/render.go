@@ -1,0 +1,114 @@
+package main
+
+import (
+	"slices"
+	"strings"
+
+	"github.com/spf13/cobra"
+
+	"kilovet/reports/html"
+	"kilovet/reports/json"
+	"kilovet/reports/page"
+	"kilovet/reports/pdf"
+	"kilovet/reports/text"
+	"kilovet/rules"
+)
+
+// sheetFlags are the flags of the page and of the paper.
+func (r *reviewing) sheetFlags(command *cobra.Command) {
+	command.Flags().StringVar(&r.html, "html", "", "write one page for the browser to `FILE`; it loads nothing")
+	command.Flags().StringVar(&r.paper, "paper", string(pdf.A4), "set the sheets on this `PAPER`: "+strings.Join(words(pdf.Papers), " or "))
+	_ = command.RegisterFlagCompletionFunc("paper", func(*cobra.Command, []string, string) ([]string, cobra.ShellCompDirective) {
+		return words(pdf.Papers), cobra.ShellCompDirectiveNoFileComp
+	})
+}
+
+// sheetsUsable refuses sheets and pages on standard output, and papers that there are
+// not.
+func (r *reviewing) sheetsUsable() error {
+	switch {
+	case r.pdf == "-":
+		return exitf(unusable, "sheets are not written to standard output; name a file, as in --pdf review.pdf")
+	case r.html == "-":
+		return exitf(unusable, "a page is not written to standard output; name a file, as in --html page.html")
+	case !slices.Contains(pdf.Papers, pdf.Paper(r.paper)):
+		return exitf(unusable, "--paper %s: no such paper; choose from %s", r.paper, strings.Join(words(pdf.Papers), ","))
+	}
+	return nil
+}
+
+// render makes every output before any of them is written; the note stands first.
+func (r *reviewing) render(review *rules.Review, note string) (outputs []output, shown []byte, err error) {
+	data, err := json.Render(review)
+	if err != nil {
+		return nil, nil, defect(err)
+	}
+	if r.pdf != "" {
+		sheets, err := pdf.RenderOn(pdf.Paper(r.paper), page.New(review).Noted(note))
+		if err != nil {
+			return nil, nil, defect(err)
+		}
+		outputs = append(outputs, output{r.pdf, sheets})
+	}
+	if r.html != "" {
+		page, err := html.RenderWith(review, html.Options{Note: note})
+		if err != nil {
+			return nil, nil, defect(err)
+		}
+		outputs = append(outputs, output{r.html, page})
+	}
+	if r.json == "-" {
+		return outputs, data, nil
+	}
+	if r.json != "" {
+		outputs = append(outputs, output{r.json, data})
+	}
+	how := r.manner(r.all)
+	how.Note = note
+	return outputs, text.Render(review, how), nil
+}
+
+// writable refuses outputs before anything is computed: sheets on standard output, and
+// what would take the place of something else.
+func (r *reviewing) writable(args []string) error {
+	if err := r.sheetsUsable(); err != nil {
+		return err
+	}
+	if err := r.distinct(args); err != nil {
+		return err
+	}
+	for _, o := range []struct {
+		path string
+		kind kind
+	}{{r.pdf, sheets}, {r.html, pages}} {
+		if o.path == "" {
+			continue
+		}
+		if err := spares(o.path, o.kind); err != nil {
+			return err
+		}
+	}
+	if r.json != "" && r.json != "-" {
+		return spares(r.json, results)
+	}
+	return nil
+}
+
+// distinct refuses outputs that would overwrite each other or the description.
+func (r *reviewing) distinct(args []string) error {
+	paths := slices.DeleteFunc([]string{r.pdf, r.html, r.json}, func(p string) bool { return p == "" || p == "-" })
+	if len(args) == 1 && args[0] != "-" {
+		paths = append(paths, args[0])
+	}
+	if r.local != "" && r.local != "-" {
+		paths = append(paths, r.local)
+	}
+	for i, p := range paths {
+		for _, q := range paths[:i] {
+			if same(p, q) {
+				return exitf(unusable, "%s is named twice; give every file a name of its own", p)
+			}
+		}
+	}
+	return nil
+}

@@ -86,6 +86,9 @@ func onset(g gap.Gap, s gas.State, l shape.Line) (gap.Answer[quantity.Voltage], 
 		return gas.UniformBreakdown(s, l.Gap())
 	}
 	a, err := gas.Onset(s, l, g.Surface)
+	if err != nil && s.Gas != gap.AirGas {
+		return roughened(g)(atLeastUniform(g, s, l))
+	}
 	if err != nil {
 		return a, err
 	}

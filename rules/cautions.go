@@ -22,7 +22,7 @@ func cautions(c *chain.Chain) []rule.Caution {
 	if c.Heater != nil {
 		all = append(all, rule.Caution{Subject: "heater", Text: "The heater supply floats at the full voltage: knobs, leads and batteries of it are live. Do not vent over a hot filament."})
 	}
-	return append(all, media(c)...)
+	return append(append(all, media(c)...), otherMedium(c)...)
 }
 
 // media are the warnings about what insulates the parts.

@@ -15,6 +15,7 @@ func curves(e *evidence.Evidence) []exhibit.Curve {
 		emissionCurve,
 		cathodeSpectrum,
 		spotCurves,
+		paschen,
 	)
 }
 
@@ -35,6 +36,10 @@ func tables(e *evidence.Evidence) []exhibit.Table {
 		distances,
 		events,
 		powerUp,
+		twoWays,
+		layersTable,
+		sphereGaps,
+		pumpDown,
 	)
 }
 

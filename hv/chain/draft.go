@@ -28,7 +28,7 @@ var draftOn = []string{"format", "title", "site", "drive", "multiplier", "load",
 var draftOther = []string{
 	"drive.unbalance", "load.resistance", "bias.voltage", "spacing.voltage", "field.electrodes.voltage",
 	"spacing.shape.radius", "spacing.shape.tip_radius", "spacing.shape.edge_radius", "spacing.shape.earthed",
-	"spacing.board", "spacing.finish", "spacing.conditioned", "spacing.stressed_area", "spacing.junction_angle", "spacing.shielded",
+	"vacuum.gauge_factor", "spacing.board", "spacing.finish", "spacing.conditioned", "spacing.stressed_area", "spacing.junction_angle", "spacing.shielded",
 	"spacing.strength", "spacing.tested_thickness", "spacing.oil_test",
 	"feedthrough.voltage",
 	"feedthrough.air_side.shape.radius", "feedthrough.air_side.shape.tip_radius", "feedthrough.air_side.shape.edge_radius", "feedthrough.air_side.shape.earthed",

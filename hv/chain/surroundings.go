@@ -11,6 +11,7 @@ type Vacuum struct {
 	Gas            document.Given[string]            `key:"gas" words:"air | nitrogen | sulphur hexafluoride | helium | argon | hydrogen | carbon dioxide" means:"gas let in (default: air)" example:"air"`
 	PressurePermit document.Given[quantity.Pressure] `key:"pressure_permit" range:"> 0 Pa, <= 100 Pa" means:"high voltage is permitted below this" example:"4e-5 mbar"`
 	LongestPath    document.Given[quantity.Length]   `key:"longest_path" range:"> 0 mm, <= 100 m" means:"longest straight path between parts at different potential" example:"300 mm"`
+	GaugeFactor    document.Given[float64]           `key:"gauge_factor" range:"> 0, <= 100" means:"true pressure over gauge reading (default: 1)" example:"1.0"`
 }
 
 // Protection holds the measures against faults.

@@ -29,6 +29,16 @@ func (s Source) Governing() Source {
 	return s
 }
 
+// Plain are sources of which none governs.
+func Plain(all []Source) []Source {
+	var plain []Source
+	for _, s := range all {
+		s.Governs = false
+		plain = append(plain, s)
+	}
+	return plain
+}
+
 // Answer is a quantity with what it rests on. The zero Answer is no answer; it
 // stands beside an error.
 type Answer[Q quantity.Number] struct {

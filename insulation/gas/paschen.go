@@ -72,25 +72,26 @@ func perTorr(a, b, gamma, least, most float64, text string, mark gap.Mark) Towns
 // of uniform fields.
 var AirConstants = perTorr(15, 365, 0.01, 100, 800, "Townsend constants of air, Bazelyan and Raizer", gap.Read)
 
-// constants are those of the other gases. The ranges are von Engel's (memory); γ is the
+// constants are those of the other gases; A and B were read where so marked. The ranges
+// of E/p they are used in are von Engel's (memory); γ is the
 // largest of the metals read (Beroual and Fofana 2016), which gives the lowest voltage.
 var constants = map[gap.Gas][]Townsend{
 	gap.AirGas: {AirConstants},
 	gap.Nitrogen: {
-		perTorr(11.8, 325, 0.1, 100, 600, "Townsend constants of nitrogen, Lieberman and Lichtenberg, Table 14.1", gap.Memory),
-		perTorr(12, 342, 0.1, 100, 600, "Townsend constants of nitrogen, Nasser 1971", gap.Memory),
+		perTorr(11.8, 325, 0.1, 100, 600, "Townsend constants of nitrogen, Lieberman and Lichtenberg, Table 14.1", gap.Read),
+		perTorr(12, 342, 0.1, 100, 600, "Townsend constants of nitrogen, Nasser 1971", gap.Read),
 	},
 	gap.Hydrogen: {
-		perTorr(4.8, 136, 0.095, 150, 600, "Townsend constants of hydrogen, Lieberman and Lichtenberg, Table 14.1", gap.Memory),
-		perTorr(5.07, 138.7, 0.095, 150, 600, "Townsend constants of hydrogen, Nasser 1971", gap.Memory),
+		perTorr(4.8, 136, 0.095, 150, 600, "Townsend constants of hydrogen, Lieberman and Lichtenberg, Table 14.1", gap.Read),
+		perTorr(5.07, 138.7, 0.095, 150, 600, "Townsend constants of hydrogen, Nasser 1971", gap.Read),
 	},
 	gap.Helium: {
-		perTorr(2.8, 77, 0.021, 20, 150, "Townsend constants of helium, Lieberman and Lichtenberg, Table 14.1", gap.Memory),
-		perTorr(3.07, 34.7, 0.021, 20, 150, "Townsend constants of helium, Nasser 1971", gap.Memory),
+		perTorr(2.8, 77, 0.021, 20, 150, "Townsend constants of helium, Lieberman and Lichtenberg, Table 14.1", gap.Read),
+		perTorr(3.07, 34.7, 0.021, 20, 150, "Townsend constants of helium, Nasser 1971", gap.Read),
 	},
 	gap.Argon: {
-		perTorr(11.5, 176, 0.12, 100, 600, "Townsend constants of argon, Lieberman and Lichtenberg, Table 14.1", gap.Memory),
-		perTorr(14.67, 180, 0.12, 100, 600, "Townsend constants of argon, Nasser 1971", gap.Memory),
+		perTorr(11.5, 176, 0.12, 100, 600, "Townsend constants of argon, Lieberman and Lichtenberg, Table 14.1", gap.Read),
+		perTorr(14.67, 180, 0.12, 100, 600, "Townsend constants of argon, Nasser 1971", gap.Read),
 	},
 	gap.CarbonDioxide: {perTorr(20, 466, 0.01, 500, 1000, "Townsend constants of carbon dioxide, von Engel", gap.Memory)},
 }
@@ -167,4 +168,12 @@ func lowestLaw(g gap.Gas, pd quantity.PressureLength) (best quantity.Voltage, so
 		}
 	}
 	return best, source, err
+}
+
+// AtProduct is the breakdown voltage between plates at a product of pressure, at 20 °C,
+// and gap: that of UniformBreakdown, which by similarity holds for any such pair.
+func AtProduct(g gap.Gas, pd quantity.PressureLength) (quantity.Voltage, error) {
+	d := math.Max(float64(pd)/float64(referencePressure), 1e-3)
+	a, err := UniformBreakdown(State{Gas: g, Pressure: quantity.Pressure(float64(pd) / d), Temperature: referenceTemperature}, quantity.Length(d))
+	return a.Value, err
 }

@@ -82,3 +82,23 @@ func SphereGap(s State, diameter, d quantity.Length) (table.Reading[quantity.Vol
 	}
 	return table.Reading[quantity.Voltage]{}, lack.Range("IEC 60052 has no spheres of %s", quantity.Text(diameter))
 }
+
+// SparkingDistance is the gap at which a measuring gap of IEC 60052 sparks at a voltage,
+// SphereGap asked backwards. Voltages under the first row or at the last are a lack.
+func SparkingDistance(s State, diameter quantity.Length, v quantity.Voltage) (quantity.Length, gap.Source, error) {
+	for i, known := range diameters {
+		if math.Abs(float64(diameter/known)-1) > 1e-3 {
+			continue
+		}
+		c := sphereGaps[i]
+		d, err := c.Reach(v / quantity.Voltage(s.Density()))
+		if err == nil && quantity.AtLeast(d, c.Last()) {
+			err = lack.Range("%s ends under %s", c.Source().Text, quantity.Text(v))
+		}
+		return d, c.Source(), err
+	}
+	return 0, gap.Source{}, lack.Range("IEC 60052 has no spheres of %s", quantity.Text(diameter))
+}
+
+// MeasuringSpheres are the diameters that IEC 60052 has here.
+func MeasuringSpheres() []quantity.Length { return append([]quantity.Length(nil), diameters[:]...) }

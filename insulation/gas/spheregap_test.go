@@ -1,10 +1,12 @@
 package gas_test
 
 import (
+	"math"
 	"testing"
 
 	"kilovet/hv/lack"
 	"kilovet/hv/quantity"
+	"kilovet/insulation/gap"
 	"kilovet/insulation/gas"
 )
 
@@ -36,5 +38,36 @@ func TestSphereGapsOutsideTheTable(t *testing.T) {
 		if _, err := gas.SphereGap(normal, c.diameter, c.d); lack.Of(err) == nil {
 			t.Errorf("spheres %v, gap %v: no lack", c.diameter, c.d)
 		}
+	}
+}
+
+// 30 kV: 5 cm spheres 0.93 cm apart between the rows 0.9 and 1 cm of the table, and asked
+// backwards every voltage gives its gap again, in thin air too.
+func TestSparkingDistanceUndoesTheSphereGap(t *testing.T) {
+	s := gas.State{Gas: gap.AirGas, Pressure: 101325, Temperature: 293.15}
+	d, _, err := gas.SparkingDistance(s, 50e-3, 30e3)
+	if err != nil {
+		t.Fatal(err)
+	}
+	near(t, "5 cm at 30 kV", float64(d), 9e-3+1e-3*(30-29.2)/(32-29.2), 1e-9)
+	for _, s.Pressure = range []quantity.Pressure{101325, 70e3} {
+		for _, diameter := range gas.MeasuringSpheres() {
+			for _, v := range []quantity.Voltage{20e3, 25e3, 28e3} {
+				d, _, err := gas.SparkingDistance(s, diameter, v)
+				if err != nil {
+					continue
+				}
+				r, err := gas.SphereGap(s, diameter, d)
+				if err != nil || math.Abs(float64(r.Value/v)-1) > 1e-6 {
+					t.Errorf("%v at %v: %v sparks at %v (%v)", diameter, v, d, r.Value, err)
+				}
+			}
+		}
+	}
+	if _, _, err := gas.SparkingDistance(s, 20e-3, 60e3); lack.Of(err) == nil {
+		t.Error("2 cm spheres spark at 60 kV")
+	}
+	if _, _, err := gas.SparkingDistance(s, 30e-3, 20e3); lack.Of(err) == nil {
+		t.Error("there is a 3 cm sphere")
 	}
 }

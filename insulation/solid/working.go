@@ -29,21 +29,11 @@ func WorkingVoltage(g gap.Gap, s Share) (gap.Answer[quantity.Voltage], error) {
 	}
 	a.Value *= quantity.Voltage(s.Of)
 	a.Because = fmt.Sprintf("%g %% of the strength; %s", float64(s.Of)*100, a.Because)
-	a.Sources = append([]gap.Source{s.Source.Governing()}, plainSources(a.Sources)...)
+	a.Sources = append([]gap.Source{s.Source.Governing()}, gap.Plain(a.Sources)...)
 	for i := range a.Shown {
 		a.Shown[i].Value *= quantity.Voltage(s.Of)
 	}
 	return a, nil
-}
-
-// plainSources are sources of which none governs.
-func plainSources(all []gap.Source) []gap.Source {
-	var plain []gap.Source
-	for _, s := range all {
-		s.Governs = false
-		plain = append(plain, s)
-	}
-	return plain
 }
 
 // ThicknessFor is the thickness at which a voltage takes a share of the strength.

@@ -58,23 +58,13 @@ func (s state) applied(a gap.Answer[quantity.Voltage]) gap.Answer[quantity.Volta
 	if !s.ready {
 		a.Because += ", half of it before polish and conditioning"
 		a.Shown = []gap.Beside[quantity.Voltage]{{Value: whole * quantity.Voltage(s.area.Value), Source: gap.Source{Text: "the same polished and conditioned; " + a.Sources[0].Text, Mark: a.Sources[0].Mark}}}
-		a.Sources = append([]gap.Source{agedSource.Governing()}, plain(a.Sources)...)
+		a.Sources = append([]gap.Source{agedSource.Governing()}, gap.Plain(a.Sources)...)
 	}
 	if s.area.Value < 1 {
 		a.Because += ", less for a large area"
-		a.Sources = append(a.Sources, plain(s.area.Sources)...)
+		a.Sources = append(a.Sources, gap.Plain(s.area.Sources)...)
 	}
 	return a
-}
-
-// plain are sources of which none governs.
-func plain(all []gap.Source) []gap.Source {
-	var rest []gap.Source
-	for _, s := range all {
-		s.Governs = false
-		rest = append(rest, s)
-	}
-	return rest
 }
 
 // calm is the field up to which electrodes of a state carry no current: that where

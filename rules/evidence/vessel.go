@@ -12,7 +12,7 @@ func (e *Evidence) Vessel() vacuum.Vessel {
 	if v == nil {
 		return vacuum.Vessel{}
 	}
-	return vacuum.Vessel{Gas: gap.Gas(v.Gas.V), LongestPath: v.LongestPath.V}
+	return vacuum.Vessel{Gas: gap.Gas(v.Gas.V), LongestPath: v.LongestPath.V, GaugeFactor: v.GaugeFactor.V}
 }
 
 // DischargeBand are the pressures at which the highest voltage of the cathode may

@@ -2,6 +2,7 @@ package spacing
 
 import (
 	"fmt"
+	"math"
 	"slices"
 	"strings"
 
@@ -40,9 +41,9 @@ func rounded(s *chain.Spacing, x evidence.Spacing, v quantity.Voltage) string {
 		return ""
 	}
 	if f := s.Of; f != nil && f.Sleeve != nil && s.Medium.V == "solid" {
-		return fmt.Sprintf("make feedthrough.pin.radius and the bore %s or more, the wall of the sleeve kept", quantity.Text(r))
+		return fmt.Sprintf("make feedthrough.pin.radius and the bore %s or more, the wall of the sleeve kept", quantity.Text(upward(r)))
 	}
-	return "round the sharper electrode to " + quantity.Text(r)
+	return "round the sharper electrode to " + quantity.Text(upward(r))
 }
 
 // resized says which key makes a length and what it must become. A radius of a
@@ -62,7 +63,14 @@ func resized(s *chain.Spacing, given document.Given[quantity.Length], need quant
 	if quantity.AtMost(need, has) {
 		return ""
 	}
+	need = upward(need)
 	return fmt.Sprintf("make %s %s or more (%s more)", key, quantity.Text(need), quantity.Text(need-has))
+}
+
+// upward rounds a size up to three significant digits, so that what is printed is enough.
+func upward(l quantity.Length) quantity.Length {
+	step := math.Pow(10, math.Floor(math.Log10(float64(l)))-2)
+	return quantity.Length(math.Ceil(float64(l)/step*(1-1e-12)) * step)
 }
 
 // wider is what makes a distance meet, its comfort included.
@@ -108,7 +116,7 @@ func againstCorona(s *chain.Spacing, x evidence.Spacing) string {
 	v := x.Voltages.Peak * quantity.Voltage(1+limits.DistanceMargin)
 	var ways []string
 	if r, err := x.RadiusForOnset(v); err == nil {
-		ways = append(ways, "round the sharper electrode to "+quantity.Text(r))
+		ways = append(ways, "round the sharper electrode to "+quantity.Text(upward(r)))
 	}
 	if d, err := x.GapForOnset(v); err == nil {
 		ways = append(ways, resized(s, s.Clearance, d))

@@ -4,6 +4,7 @@ package vessel
 import (
 	"fmt"
 
+	"kilovet/hv/chain"
 	"kilovet/hv/document"
 	"kilovet/hv/lack"
 	"kilovet/hv/quantity"
@@ -49,7 +50,20 @@ func judgePermit(e *evidence.Evidence) rule.Judgement {
 		quantity.Text(c.Vacuum.LongestPath.V), quantity.Text(limits.Free.Value), quantity.Text(limits.Crowded.Value))
 	f.Remedy = "permit high voltage only below " + quantity.Text(limits.Free.Value) + ", or shorten the longest path"
 	margin := float64(limits.Crowded.Value/limits.Free.Value) - 1
-	return rule.One(f.Most(rule.Of(c.Vacuum.PressurePermit.V), rule.Of(limits.Crowded.Value), margin).WithoutRemedyIfMet())
+	f = f.Most(rule.Of(c.Vacuum.PressurePermit.V), rule.Of(limits.Crowded.Value), margin)
+	return rule.One(f.Assume(takenFor(c.Vacuum)...).WithoutRemedyIfMet())
+}
+
+// takenFor is what is taken for granted of the gas and its gauge.
+func takenFor(v *chain.Vacuum) []string {
+	var all []string
+	if !v.Gas.Set() {
+		all = append(all, "the gas of the vessel is not given and counts as air")
+	}
+	if g := v.Gas.Or("air"); g != "air" && g != "nitrogen" && !v.GaugeFactor.Set() {
+		all = append(all, "the gauge is taken to read true in "+g+": no gauge_factor is given")
+	}
+	return all
 }
 
 // Rules lists the rules of this family.

@@ -11,6 +11,7 @@ import (
 
 	"kilovet/hv/chain"
 	"kilovet/rules"
+	"kilovet/rules/evidence"
 	"kilovet/rules/figure"
 	"kilovet/rules/rule"
 )
@@ -79,14 +80,16 @@ func TestExamples(t *testing.T) {
 		}
 		data := described(t, name)
 		if base[name] == nil {
-			base[name] = verdicts(reviewed(t, data))
+			base[name] = judged(t, data)
 		}
+		was := base[name]
 		t.Run(r.ID, func(t *testing.T) {
+			t.Parallel()
 			want := map[string]rule.Verdict{}
 			for _, c := range r.Example.Changes {
 				want[c.Rule+" | "+c.Subject] = c.Verdict
 			}
-			got := changed(base[name], verdicts(reviewed(t, swapped(t, data, r.Example.Swaps))))
+			got := changed(was, judged(t, swapped(t, data, r.Example.Swaps)))
 			if d := cmp.Diff(want, got); d != "" {
 				t.Error(d)
 			}
@@ -104,10 +107,19 @@ func swapped(t *testing.T, data []byte, swaps []rule.Swap) []byte {
 	return data
 }
 
-func verdicts(r *rules.Review) map[string]rule.Verdict {
-	all := map[string]rule.Verdict{}
-	for _, f := range r.Findings {
-		all[f.Rule+" | "+f.Subject] = f.Verdict
+// judged is the verdict of every finding, without the figures and pictures of a whole
+// review.
+func judged(t *testing.T, data []byte) map[string]rule.Verdict {
+	t.Helper()
+	c, faults := chain.Read(data)
+	if len(faults) > 0 {
+		t.Fatal(faults)
+	}
+	e, all := evidence.New(c), map[string]rule.Verdict{}
+	for _, r := range rules.All() {
+		for _, f := range r.Judge(e).Findings {
+			all[f.Rule+" | "+f.Subject] = f.Verdict
+		}
 	}
 	return all
 }

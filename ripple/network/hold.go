@@ -15,15 +15,20 @@ type HoldOptions struct {
 	Node  string
 	Set   quantity.Voltage // magnitude of the node's mean, with the polarity of the multiplier
 	First quantity.Voltage // a peak to begin with
+	// Within is how near, relative, the mean must come; zero is 1e-8.
+	Within quantity.Fraction
 	Options
 }
 
-// Hold finds the peak of the drive at which the mean of a node is a set voltage, within a
-// part in 1e8, and the state there, by the secant method: the mean is all but proportional
+// Hold finds the peak of the drive at which the mean of a node is a set voltage, and
+// the state there, by the secant method: the mean is all but proportional
 // to the peak. It is a lack where the load pulls the node to nothing, where there is no
 // such node, and where no peak is found in a dozen trials.
 func Hold(o HoldOptions) (quantity.Voltage, *Periodic, error) {
-	const good, tries = 1e-8, 12
+	const tries = 12
+	if o.Within == 0 {
+		o.Within = 1e-8
+	}
 	a := o.First
 	va, near, err := o.try(a)
 	if err != nil {
@@ -32,6 +37,9 @@ func Hold(o HoldOptions) (quantity.Voltage, *Periodic, error) {
 	if va <= 0 {
 		return 0, nil, lack.Failed("the load pulls %s to nothing at %s of drive", o.Node, quantity.Text(a))
 	}
+	if o.holds(va) {
+		return a, near, nil
+	}
 	b := a * o.Set / va
 	for range tries {
 		o.From = near
@@ -39,7 +47,7 @@ func Hold(o HoldOptions) (quantity.Voltage, *Periodic, error) {
 		if err != nil {
 			return 0, nil, err
 		}
-		if quantity.AtMost(math.Abs(float64(vb/o.Set-1)), good) {
+		if o.holds(vb) {
 			return b, at, nil
 		}
 		if quantity.Equal(vb, va) {
@@ -48,6 +56,11 @@ func Hold(o HoldOptions) (quantity.Voltage, *Periodic, error) {
 		a, b, va, near = b, b+(o.Set-vb)*(b-a)/(vb-va), vb, at
 	}
 	return 0, nil, lack.Failed("no drive was found that holds %s at %s", o.Node, quantity.Text(o.Set))
+}
+
+// holds reports whether a mean is near enough.
+func (o *HoldOptions) holds(v quantity.Voltage) bool {
+	return quantity.AtMost(math.Abs(float64(v/o.Set-1)), float64(o.Within))
 }
 
 // try is the mean of the node at a peak, and the state it was read from.

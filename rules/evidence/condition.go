@@ -23,21 +23,6 @@ const (
 // States lists them in the order of print.
 var States = []State{Working, Cold, Lost}
 
-// Corner is a corner of the tolerances.
-type Corner string
-
-// The corners: every part at its nominal value, or all at one end of their
-// tolerance; in a corner the divider reads low by its error, so that regulation
-// holds the output too high.
-const (
-	Nominal Corner = ""
-	AllLow  Corner = "all parts at the low end of their tolerance"
-	AllHigh Corner = "all parts at the high end of their tolerance"
-)
-
-// Corners lists them.
-var Corners = []Corner{Nominal, AllLow, AllHigh}
-
 // Condition is what a chain is computed under.
 type Condition struct {
 	State  State
@@ -53,7 +38,7 @@ type Condition struct {
 func (c Condition) Text() string {
 	words := []string{string(c.State)}
 	if c.Corner != Nominal {
-		words = append(words, string(c.Corner))
+		words = append(words, c.Corner.Text())
 	}
 	if c.Fault.Name != "" {
 		words = append(words, c.Fault.Name)

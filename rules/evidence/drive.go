@@ -102,8 +102,8 @@ func (e *Evidence) held() (quantity.Voltage, error) {
 // peakFor finds the peak for a mean at the sensed node.
 func (e *Evidence) peakFor(set quantity.Voltage) (trial, error) {
 	peak, at, err := network.Hold(network.HoldOptions{
-		Node: e.chain.Divider.Senses.Or("output"), Set: set, First: e.chain.Drive.Peak.V,
-		Options: network.Options{Frequency: e.chain.Drive.Frequency.V, From: e.alike()},
+		Node: e.chain.Divider.Senses.Or("output"), Set: set, First: e.firstPeak(),
+		Options: network.Options{Frequency: e.chain.Drive.Frequency.V, From: e.alike()}, Within: e.condition.Corner.within(),
 		Build: func(peak quantity.Voltage) (*circuit.Circuit, error) {
 			c, err := e.circuitAt(peak)
 			if err != nil {
@@ -113,6 +113,26 @@ func (e *Evidence) peakFor(set quantity.Voltage) (trial, error) {
 		},
 	})
 	return trial{peak, at}, err
+}
+
+// near is the condition whose drive is near that of this one: with one part at its end
+// that with none, else the nominal one.
+func (e *Evidence) near() Condition {
+	near := e.condition
+	if near.Corner = Nominal; e.condition.Corner.one() && e.condition.Corner != alone("") {
+		near.Corner = alone("")
+	}
+	return near
+}
+
+// firstPeak is a drive to begin the search with: one that is near, or the full one.
+func (e *Evidence) firstPeak() quantity.Voltage {
+	if e.condition.Corner != Nominal {
+		if t, err := e.Under(e.near()).trial(); err == nil {
+			return t.peak
+		}
+	}
+	return e.chain.Drive.Peak.V
 }
 
 // Circuit is the circuit under the condition.
@@ -170,12 +190,4 @@ func (e *Evidence) sound() error {
 	return c.Doubt()
 }
 
-func (e *Evidence) corner() func(string, quantity.Fraction) float64 {
-	switch e.condition.Corner {
-	case AllLow:
-		return func(_ string, t quantity.Fraction) float64 { return 1 - float64(t) }
-	case AllHigh:
-		return func(_ string, t quantity.Fraction) float64 { return 1 + float64(t) }
-	}
-	return nil
-}
+func (e *Evidence) corner() func(string, quantity.Fraction) float64 { return e.condition.Corner.ends() }

@@ -98,7 +98,7 @@ func (e *Evidence) Mean(f *chain.Feedthrough) (quantity.Voltage, error) {
 	if f.Voltage.Set() {
 		return f.Voltage.V, nil
 	}
-	most, err := Largest(e, Ratings(), append([]string{f.Node.V}, f.Also.V...), func(e *Evidence, n string) (quantity.Voltage, error) {
+	most, err := Worst(e, append([]string{f.Node.V}, f.Also.V...), func(e *Evidence, n string) (quantity.Voltage, error) {
 		pin, err := e.Potential(n)
 		if err != nil {
 			return 0, err

@@ -19,7 +19,7 @@ func (e *Evidence) Accelerating() (Extreme[quantity.Voltage], error) {
 	if e.chain.HasCathode() && !e.chain.Gun.EarthedCathode() {
 		node = "cathode"
 	}
-	return Largest(e, Ratings(), []string{node}, func(e *Evidence, n string) (quantity.Voltage, error) { return e.Between(n, "ground") })
+	return Worst(e, []string{node}, func(e *Evidence, n string) (quantity.Voltage, error) { return e.Between(n, "ground") })
 }
 
 // Radiation is the air kerma rate 0.1 m outside a shield, at a voltage.

@@ -44,7 +44,11 @@ func (e *Evidence) alike() *network.Periodic {
 	if e.condition.Corner == Nominal && e.condition.Fault.Name == "" {
 		return nil
 	}
-	s, err := e.Under(Condition{State: e.condition.State}).solution()
+	near := Condition{State: e.condition.State}
+	if e.condition.Fault.Name == "" {
+		near.Corner = e.near().Corner
+	}
+	s, err := e.Under(near).solution()
 	if err != nil {
 		return nil
 	}

@@ -65,7 +65,7 @@ func (e *Evidence) across(s *chain.Spacing) (v gap.Voltages, under, long Conditi
 		return gap.Voltages{Peak: s.Voltage.V, LongTerm: s.Voltage.V}, under, long, nil
 	}
 	live := append([]string{s.From.V}, s.Also.V...)
-	peak, err := Largest(e, Ratings(), live, func(e *Evidence, n string) (quantity.Voltage, error) { return e.Between(n, s.To.V) })
+	peak, err := Worst(e, live, func(e *Evidence, n string) (quantity.Voltage, error) { return e.Between(n, s.To.V) })
 	if err != nil {
 		return v, under, long, err
 	}
@@ -85,7 +85,7 @@ func (e *Evidence) alternating(s *chain.Spacing, live []string, v *gap.Voltages)
 	if e.chain.Drive.Frequency.V < high {
 		return nil
 	}
-	swing, err := Largest(e, Ratings(), live, func(e *Evidence, n string) (quantity.Voltage, error) { return e.Swing(n, s.To.V) })
+	swing, err := Worst(e, live, func(e *Evidence, n string) (quantity.Voltage, error) { return e.Swing(n, s.To.V) })
 	v.Alternating, v.Frequency = swing.Value/2, e.chain.Drive.Frequency.V
 	return err
 }

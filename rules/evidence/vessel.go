@@ -18,7 +18,7 @@ func (e *Evidence) Vessel() vacuum.Vessel {
 // DischargeBand are the pressures at which the highest voltage of the cathode may
 // break down the longest path.
 func (e *Evidence) DischargeBand() (vacuum.Band, error) {
-	most, err := Largest(e, Ratings(), []string{"output"}, func(e *Evidence, n string) (quantity.Voltage, error) { return e.Between(n, "ground") })
+	most, err := Worst(e, []string{"output"}, func(e *Evidence, n string) (quantity.Voltage, error) { return e.Between(n, "ground") })
 	if err != nil {
 		return vacuum.Band{}, err
 	}

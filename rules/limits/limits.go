@@ -57,3 +57,9 @@ const FeedTest = 1.2
 
 // FeedTestSource is where FeedTest comes from.
 var FeedTestSource = rule.Source{Text: "insulation test of a feed at 1.2 to 2 times its working DC voltage", Mark: rule.Practice, Governs: true}
+
+// StraySource says why strays are judged.
+var StraySource = practice("strays of a picofarad take hundreds of volts of a long multiplier: more than a quarter is a matter of layout, not of the load")
+
+// HumSource says why hum is judged against ripple.
+var HumSource = practice("hum through an unscreened heater feed can be a hundred times the ripple that the filter was built for")

@@ -40,6 +40,11 @@ func TestLimitsAreWhatTheirSourcesSay(t *testing.T) {
 		{"blur", limits.BlurMargin, 0.1},
 		{"X-rays harmless below (read)", float64(limits.HarmlessBelow), 5000},
 		{"dose rate, µSv/h over dose per kerma 1.74 (read, memory)", float64(limits.DoseRate) * 3600e6, 1 / 1.74},
+		{"strays", float64(limits.StrayShare), 0.25},
+		{"strays, comfort", float64(limits.StrayComfort), 0.05},
+		{"half-wave ripple", limits.HalfWaveShare, 0.9},
+		{"half-wave ripple, comfort", limits.HalfWaveComfort, 0.5},
+		{"hum over ripple", limits.HumOverRipple, 10},
 		{"recovery", limits.RecoveryShare, 0.1},
 	} {
 		if !(math.Abs(c.got-c.want) <= 1e-12*c.want) {

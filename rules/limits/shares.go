@@ -51,3 +51,16 @@ const (
 	// common practice, no source.
 	DoseComfort = 3
 )
+
+// What surprises in a multiplier; common practice, no source, unless said otherwise.
+const (
+	// StrayShare is the share of the voltage without load that strays may take.
+	StrayShare   quantity.Fraction = 0.25
+	StrayComfort quantity.Fraction = 0.05
+	// HalfWaveShare is the share of the ripple of a half-wave multiplier from which a
+	// symmetrical one has gained nothing, HalfWaveComfort that in comfort.
+	HalfWaveShare   = 0.9
+	HalfWaveComfort = 0.5
+	// HumOverRipple is how far hum may lie above the ripple.
+	HumOverRipple = 10
+)

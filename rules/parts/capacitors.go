@@ -34,7 +34,7 @@ func judgeCapacitor(e *evidence.Evidence, g group) rule.Finding {
 	part := ratingsOf(g.elements[0])
 	f := about("capacitor.voltage", rule.Equipment, g, part.voltage.Place)
 	r := rating[quantity.Voltage]{what: "voltage", rated: part.voltage.V, given: part.voltage.Set(), key: part.voltage.Key,
-		derating: limits.CapacitorVoltage, conditions: evidence.Ratings(), stress: (*evidence.Evidence).ElementPeak, tolerance: &part.tolerance}
+		derating: limits.CapacitorVoltage, stress: (*evidence.Evidence).ElementPeak, tolerance: &part.tolerance}
 	return r.judge(e, g, f)
 }
 

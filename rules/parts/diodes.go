@@ -25,7 +25,7 @@ var diodeReverse = rule.Rule{
 		return each(groups(e, isDiode), "no diode is described", func(g group) rule.Finding {
 			rated, at := g.elements[0].DiodeRating()
 			r := rating[quantity.Voltage]{what: "reverse voltage", rated: rated, given: at.Line > 0, key: at.Key,
-				derating: limits.DiodeReverse, conditions: evidence.Ratings(), stress: (*evidence.Evidence).ReversePeak}
+				derating: limits.DiodeReverse, stress: (*evidence.Evidence).ReversePeak}
 			return r.judge(e, g, about("diode.reverse_voltage", rule.Equipment, g, at))
 		})
 	},
@@ -46,7 +46,7 @@ var diodeCurrent = rule.Rule{
 		return each(groups(e, hasDiodePart), "no multiplier diode is described", func(g group) rule.Finding {
 			rated := g.elements[0].DiodePart.RatedCurrent
 			r := rating[quantity.Current]{what: "mean current", rated: rated.V, given: rated.Set(), key: rated.Key,
-				derating: limits.DiodeCurrent, conditions: evidence.Ratings(), stress: (*evidence.Evidence).DiodeMean}
+				derating: limits.DiodeCurrent, stress: (*evidence.Evidence).DiodeMean}
 			return r.judge(e, g, about("diode.mean_current", rule.Equipment, g, rated.Place))
 		})
 	},

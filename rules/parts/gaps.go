@@ -24,7 +24,7 @@ var gapStrikes = rule.Rule{
 	Judge: func(e *evidence.Evidence) rule.Judgement {
 		return each(groups(e, isGap), "no gap or clamp is described", func(g group) rule.Finding {
 			r := rating[quantity.Voltage]{what: "voltage", rated: g.elements[0].Strikes, given: true,
-				derating: limits.InsulationVoltage, conditions: evidence.Ratings(), stress: (*evidence.Evidence).ElementPeak}
+				derating: limits.InsulationVoltage, stress: (*evidence.Evidence).ElementPeak}
 			return r.judge(e, g, about("gap.strikes", rule.Equipment, g, g.elements[0].Place))
 		})
 	},

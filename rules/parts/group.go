@@ -2,8 +2,6 @@
 package parts
 
 import (
-	"strings"
-
 	"kilovet/hv/circuit"
 	"kilovet/hv/document"
 	"kilovet/hv/quantity"
@@ -34,7 +32,7 @@ func groups(e *evidence.Evidence, keep func(circuit.Element) bool) []group {
 		if !keep(el) {
 			continue
 		}
-		subject := partOf(el.Name)
+		subject := evidence.PartOf(el.Name)
 		i, known := at[subject]
 		if !known {
 			i = len(all)
@@ -44,14 +42,6 @@ func groups(e *evidence.Evidence, keep func(circuit.Element) bool) []group {
 		all[i].elements = append(all[i].elements, el)
 	}
 	return all
-}
-
-// partOf is the described part of an element: "multiplier.diode.a.3" is one of "multiplier.diode".
-func partOf(element string) string {
-	if fields := strings.Split(element, "."); fields[0] == "multiplier" || strings.HasPrefix(element, "heater.centre_resistors") {
-		return strings.Join(fields[:2], ".")
-	}
-	return element
 }
 
 // about starts a finding on a group with the place of the rating judged.

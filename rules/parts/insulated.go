@@ -52,8 +52,8 @@ var feedVoltage = rule.Rule{
 func insulated(e *evidence.Evidence, id, subject, from, to string, rated document.Given[quantity.Voltage]) rule.Judgement {
 	f := rule.Finding{Rule: id, Subject: subject, Concern: rule.Life, Place: rated.Place}
 	r := rating[quantity.Voltage]{what: "voltage", rated: rated.V, given: rated.Set(), key: rated.Key,
-		derating: limits.InsulationVoltage, conditions: evidence.Ratings(),
-		stress: func(e *evidence.Evidence, _ string) (quantity.Voltage, error) { return e.Between(from, to) }}
+		derating: limits.InsulationVoltage,
+		stress:   func(e *evidence.Evidence, _ string) (quantity.Voltage, error) { return e.Between(from, to) }}
 	return rule.Judgement{Findings: []rule.Finding{r.judge(e, group{subject: subject, elements: one(subject)}, f)}}
 }
 
@@ -83,7 +83,7 @@ func judgeFeedTest(e *evidence.Evidence, test document.Given[quantity.Voltage]) 
 	if !test.Set() {
 		return f.Lacking(lack.Key(test.Key))
 	}
-	most, err := evidence.Largest(e, evidence.Ratings(), []string{"heater.feed"}, func(e *evidence.Evidence, _ string) (quantity.Voltage, error) { return e.Between("cathode", "mains") })
+	most, err := evidence.Worst(e, []string{"heater.feed"}, func(e *evidence.Evidence, _ string) (quantity.Voltage, error) { return e.Between("cathode", "mains") })
 	if err != nil {
 		return f.Lacking(err)
 	}

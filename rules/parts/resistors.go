@@ -30,7 +30,7 @@ var resistorVoltage = rule.Rule{
 				return v / quantity.Voltage(part.count), err
 			}
 			r := rating[quantity.Voltage]{what: "voltage of each element", rated: part.voltage.V, given: part.voltage.Set(), key: part.voltage.Key,
-				derating: limits.ResistorVoltage, conditions: evidence.Ratings(), stress: perElement, tolerance: &part.tolerance}
+				derating: limits.ResistorVoltage, stress: perElement, tolerance: &part.tolerance}
 			return r.judge(e, g, about("resistor.voltage", rule.Equipment, g, part.voltage.Place))
 		})
 	},
@@ -65,7 +65,7 @@ func judgePower(e *evidence.Evidence, g group) rule.Finding {
 		return p / quantity.Power(part.count*part.strings), err
 	}
 	r := rating[quantity.Power]{what: "power of each element", rated: part.power.V * quantity.Power(share), given: part.power.Set(), key: part.power.Key,
-		derating: limits.ResistorPower, conditions: evidence.Ratings(), stress: perElement, tolerance: &part.tolerance}
+		derating: limits.ResistorPower, stress: perElement, tolerance: &part.tolerance}
 	return r.judge(e, g, f)
 }
 

@@ -18,7 +18,7 @@ type rating[Q quantity.Number] struct {
 	given      bool
 	key        string
 	derating   limits.Derating
-	conditions []evidence.Condition
+	conditions []evidence.Condition // nil: every state and corner
 	stress     func(*evidence.Evidence, string) (Q, error)
 	// tolerance of the part's value, where it has one: not given, it counts as none.
 	tolerance *document.Given[quantity.Fraction]
@@ -33,7 +33,7 @@ func (r rating[Q]) judge(e *evidence.Evidence, g group, f rule.Finding) rule.Fin
 	if !r.given {
 		return f.Lacking(lack.Key(r.key))
 	}
-	most, err := evidence.Largest(e, r.conditions, g.names(), r.stress)
+	most, err := r.worst(e, g)
 	if err != nil {
 		return f.Lacking(err)
 	}
@@ -44,4 +44,22 @@ func (r rating[Q]) judge(e *evidence.Evidence, g group, f rule.Finding) rule.Fin
 	}
 	f = f.ShareOf(rule.Of(r.rated)).Most(rule.Of(most.Value), rule.Of(Q(float64(r.rated)*float64(r.derating.Fails))), r.derating.Margin())
 	return f.WithoutRemedyIfMet()
+}
+
+// wellBelow is the share of what would be marginal up to which the corner by sign is not
+// sought: tolerances do not double a stress. An assumption of this review.
+const wellBelow = 0.5
+
+// worst is the largest stress over conditions and elements; over every state and corner
+// it takes the corner by the sign of each part's sensitivity too, where the stress is not
+// well below what would be marginal.
+func (r rating[Q]) worst(e *evidence.Evidence, g group) (evidence.Extreme[Q], error) {
+	if r.conditions != nil {
+		return evidence.Largest(e, r.conditions, g.names(), r.stress)
+	}
+	most, err := evidence.Largest(e, evidence.Ratings(), g.names(), r.stress)
+	if err != nil || float64(most.Value) <= wellBelow*float64(r.rated)*float64(r.derating.Marginal) {
+		return most, err
+	}
+	return evidence.BySign(e, most, r.stress)
 }

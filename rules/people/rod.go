@@ -146,7 +146,7 @@ var rodVoltage = rule.Rule{
 		if !r.RatedVoltage.Set() {
 			return *only(f.Lacking(lack.Key(r.RatedVoltage.Key)))
 		}
-		most, err := evidence.Largest(e, evidence.Ratings(), e.Nodes(), func(e *evidence.Evidence, n string) (quantity.Voltage, error) { return e.Between(n, "ground") })
+		most, err := evidence.Worst(e, e.Nodes(), func(e *evidence.Evidence, n string) (quantity.Voltage, error) { return e.Between(n, "ground") })
 		if err != nil {
 			return *only(f.Lacking(err))
 		}
@@ -184,7 +184,7 @@ var rodEnergy = rule.Rule{
 		if !r.RatedEnergy.Set() {
 			return *only(f.Lacking(lack.Key(r.RatedEnergy.Key)))
 		}
-		most, err := evidence.Largest(e, evidence.Ratings(), []string{""}, func(e *evidence.Evidence, _ string) (quantity.Energy, error) { return e.StoredEnergy() })
+		most, err := evidence.Worst(e, []string{""}, func(e *evidence.Evidence, _ string) (quantity.Energy, error) { return e.StoredEnergy() })
 		if err != nil {
 			return *only(f.Lacking(err))
 		}

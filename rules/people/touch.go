@@ -57,7 +57,7 @@ func touchSources() []rule.Source {
 }
 
 func touchable(e *evidence.Evidence, node string, f rule.Finding) rule.Finding {
-	most, err := evidence.Largest(e, evidence.Ratings(), []string{node},
+	most, err := evidence.Worst(e, []string{node},
 		func(e *evidence.Evidence, n string) (quantity.Voltage, error) { return e.Between(n, "ground") })
 	if err != nil {
 		return f.Lacking(err)

@@ -89,8 +89,11 @@ func toGround(e *evidence.Evidence) ([]pair, error) {
 		if node == "heater.a" || node == "heater.b" || node == "mains" {
 			continue
 		}
-		most, err := evidence.Largest(e, evidence.Ratings(), []string{node},
-			func(e *evidence.Evidence, n string) (quantity.Voltage, error) { return e.Between(n, "ground") })
+		toGround := func(e *evidence.Evidence, n string) (quantity.Voltage, error) { return e.Between(n, "ground") }
+		most, err := evidence.Largest(e, evidence.Ratings(), []string{node}, toGround)
+		if err == nil && quantity.AtMost(most.Value, limits.DescribedAbove) {
+			most, err = evidence.BySign(e, most, toGround)
+		}
 		if err != nil {
 			return nil, err
 		}

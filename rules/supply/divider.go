@@ -32,7 +32,7 @@ var dividerClamp = rule.Rule{
 			return rule.Over("no divider is described")
 		}
 		f := rule.Finding{Rule: "divider.clamp", Subject: "divider.tap", Concern: rule.Life, Relation: rule.Presence, Place: d.Here(), Sources: []rule.Source{clampSource}}
-		open, err := evidence.Largest(e, evidence.Ratings(), []string{"divider.tap"}, openArm)
+		open, err := evidence.Worst(e, []string{"divider.tap"}, openArm)
 		if err != nil {
 			return rule.One(f.Lacking(err))
 		}
@@ -82,7 +82,7 @@ func judgeMeter(e *evidence.Evidence, d *chain.Divider) rule.Finding {
 		f.Place = d.Meter.Here()
 		return f.Lacking(lack.Key(rated.Key))
 	}
-	most, err := evidence.Largest(e, evidence.Ratings(), []string{"divider.tap"}, func(e *evidence.Evidence, _ string) (quantity.Voltage, error) { return e.MeterWithOpenArm() })
+	most, err := evidence.Worst(e, []string{"divider.tap"}, func(e *evidence.Evidence, _ string) (quantity.Voltage, error) { return e.MeterWithOpenArm() })
 	if err != nil {
 		return f.Lacking(err)
 	}

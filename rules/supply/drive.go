@@ -50,9 +50,12 @@ var balance = rule.Rule{
 	Concern: rule.Performance,
 	Sources: []rule.Source{balanceSource},
 	Example: rule.Example{
-		Of:      "positive",
-		Swaps:   []rule.Swap{{Was: `unbalance  = "1 %"`, Becomes: ""}},
-		Changes: []rule.Change{{Rule: "multiplier.balance", Subject: "multiplier.ripple", Verdict: rule.Unassessed}},
+		Of:    "positive",
+		Swaps: []rule.Swap{{Was: `unbalance  = "1 %"`, Becomes: ""}},
+		Changes: []rule.Change{
+			{Rule: "multiplier.balance", Subject: "multiplier.ripple", Verdict: rule.Unassessed},
+			{Rule: "multiplier.unbalance", Subject: "multiplier.ripple"},
+		},
 	},
 	Judge: func(e *evidence.Evidence) rule.Judgement {
 		c := e.Chain()

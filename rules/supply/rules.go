@@ -6,5 +6,5 @@ import (
 
 // Rules lists the rules of this family.
 func Rules() []rule.Rule {
-	return []rule.Rule{headroom, balance, dividerClamp, meterRating, errorKnown}
+	return []rule.Rule{headroom, balance, strays, unbalanced, humShare, dividerClamp, meterRating, errorKnown}
 }

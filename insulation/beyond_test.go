@@ -28,6 +28,9 @@ func TestFrequencyFactorOfBluntElectrodes(t *testing.T) {
 	} {
 		a := clearance(t, g, driven(f))
 		near(t, quantity.Text(f), float64(a.Value), plain*factor, 1e-9)
+		if (len(a.Assumptions) == 1) != (f > 30e3) { // from memory: at best marginal
+			t.Errorf("%v: assumptions %v", f, a.Assumptions)
+		}
 		if named := strings.Contains(a.Because, "for the frequency"); named != (factor > 1) {
 			t.Errorf("%v: %q", f, a.Because)
 		}
@@ -47,7 +50,7 @@ func TestFrequencyWhereItsTablesWereNotRead(t *testing.T) {
 	}
 	g.Shape.Radius = 2e-3
 	c, err := insulation.CreepageNeeded(g, driven(100e3))
-	if err != nil || len(c.Assumptions) != 1 {
+	if err != nil || len(c.Assumptions) == 0 {
 		t.Errorf("creepage at 100 kHz: %v (%v) with assumptions %v", c.Value, err, c.Assumptions)
 	}
 	if _, err = insulation.ClearanceNeeded(g, driven(11e6)); lack.Of(err) == nil {

@@ -119,6 +119,9 @@ func electrical(g gap.Gap, v gap.Voltages, field table.Case) ([]demand, error) {
 		return nil, err
 	}
 	steady.raise(factor, "the frequency")
+	if fast(v) {
+		steady.assumed = append(steady.assumed, "the clearance at "+quantity.Text(v.Frequency)+" follows IEC 60664-4, from memory")
+	}
 	asked := []demand{steady}
 	impulse, err := impulseDemand(g, v, field)
 	if err != nil {

@@ -7,7 +7,7 @@ import (
 // Every exhibit of the built-in descriptions can be drawn, is named once, and belongs
 // to something.
 func TestExhibitsAreWhole(t *testing.T) {
-	for _, name := range []string{"column", "positive", "spacings", "faulty", "plate"} {
+	for _, name := range []string{"column", "positive", "spacings", "faulty", "plate", "lead"} {
 		r := reviewed(t, described(t, name))
 		seen := map[[2]string]bool{}
 		once := func(id, subject string) {

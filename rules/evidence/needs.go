@@ -5,6 +5,7 @@ import (
 	"kilovet/insulation"
 	"kilovet/insulation/gap"
 	"kilovet/insulation/solid"
+	"kilovet/insulation/vacuum"
 )
 
 // The sizes below ask the laws of a spacing backwards.
@@ -58,4 +59,24 @@ func (x Spacing) InOil() (quantity.Length, error) {
 // GapForOnset is the distance across an annulus at which it discharges at a voltage.
 func (a Annulus) GapForOnset(v quantity.Voltage) (quantity.Length, error) {
 	return insulation.ClearanceForOnset(a.Gap, v)
+}
+
+// Remarks are what is said of a spacing beside its estimates: of solids the flat void that
+// would discharge first, and whether a discharge test is asked for; in vacuum the voltage
+// of conditioning. The sources belong to them.
+func (x Spacing) Remarks() (texts []string, sources []gap.Source) {
+	switch x.Gap.Medium {
+	case gap.Vacuum:
+		a := vacuum.ConditioningVoltage(x.Voltages.Peak)
+		return []string{"conditioning takes up to " + quantity.Text(a.Value)}, gap.Plain(a.Sources)
+	case gap.Solid:
+		if v, err := insulation.WorstVoid(x.Gap); err == nil {
+			texts = append(texts, "a flat void of "+quantity.Text(v.Size)+" in it would discharge from "+quantity.Text(v.Voltage)+" alternating")
+		}
+		if asked, source := insulation.DischargeTestAsked(x.Gap, x.Voltages); asked {
+			texts = append(texts, "a partial discharge test is asked for")
+			sources = append(sources, source)
+		}
+	}
+	return texts, sources
 }

@@ -55,6 +55,9 @@ func judgeBreakdown(e *evidence.Evidence, s *chain.Spacing) rule.Finding {
 	f.Under = x.Under.Text()
 	f.Sources = append(append(rule.Cited(stands.Sources), breakdownSource), shown(stands.Answer)...)
 	f.Because = fmt.Sprintf("%s across a gap expected to break down at %s (%s)", quantity.Text(x.Voltages.Peak), quantity.Text(stands.Value), stands.Because)
+	remarks, cited := x.Remarks()
+	f.Because = strings.Join(append([]string{f.Because}, remarks...), "; ")
+	f.Sources = append(f.Sources, rule.Cited(cited)...)
 	limit := stands.Value * limits.BreakdownShare
 	f = f.ShareOf(rule.Of(stands.Value)).Most(rule.Of(x.Voltages.Peak), rule.Of(limit), limits.BreakdownShare/limits.BreakdownComfort-1).Assume(stands.Assumptions...)
 	switch {

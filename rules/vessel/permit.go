@@ -8,6 +8,8 @@ import (
 	"kilovet/hv/document"
 	"kilovet/hv/lack"
 	"kilovet/hv/quantity"
+	"kilovet/insulation/gap"
+	"kilovet/insulation/vacuum"
 	"kilovet/rules/evidence"
 	"kilovet/rules/rule"
 )
@@ -48,6 +50,10 @@ func judgePermit(e *evidence.Evidence) rule.Judgement {
 	f.Sources = append(rule.Cited(limits.Crowded.Sources), freeSource)
 	f.Because = fmt.Sprintf("permitted below %s; over %s up to %s is free of discharge, none above %s", quantity.Text(c.Vacuum.PressurePermit.V),
 		quantity.Text(c.Vacuum.LongestPath.V), quantity.Text(limits.Free.Value), quantity.Text(limits.Crowded.Value))
+	if !quantity.AtMost(c.Vacuum.PressurePermit.V, vacuum.FeedthroughPressure) {
+		f.Because += "; ratings of feedthroughs hold below " + quantity.Text(vacuum.FeedthroughPressure)
+		f.Sources = append(f.Sources, rule.Cited([]gap.Source{vacuum.FeedthroughSource})...)
+	}
 	f.Remedy = "permit high voltage only below " + quantity.Text(limits.Free.Value) + ", or shorten the longest path"
 	margin := float64(limits.Crowded.Value/limits.Free.Value) - 1
 	f = f.Most(rule.Of(c.Vacuum.PressurePermit.V), rule.Of(limits.Crowded.Value), margin)

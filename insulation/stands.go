@@ -44,11 +44,7 @@ func fieldAt(g gap.Gap, onset gap.Result[quantity.Voltage]) (gap.Answer[quantity
 	if err != nil {
 		return gap.Answer[quantity.Field]{}, err
 	}
-	a := gap.Answer[quantity.Field]{Value: l.Peak(onset.Value), Because: onset.Because, Sources: onset.Sources, Assumptions: onset.Assumptions}
-	for _, b := range onset.Shown {
-		a.Shown = append(a.Shown, gap.Beside[quantity.Field]{Value: l.Peak(b.Value), Source: b.Source})
-	}
-	return a, nil
+	return fieldAlong(l, onset)
 }
 
 func lineOf(g gap.Gap) (shape.Line, error) {
@@ -142,7 +138,11 @@ func breakdown(g gap.Gap, sharp gap.Polarity, starts gap.Result[quantity.Voltage
 	case g.Shape.Kind == gap.Plates || s.Gas != gap.AirGas:
 		return starts.Answer, nil
 	}
-	return crossing(g, s, l, sharp, starts)
+	law := gas.PointPlane
+	if twoSided(g.Shape.Kind) || sharp == gap.Negative {
+		law = gas.Needles
+	}
+	return crossing(s, l, law, starts)
 }
 
 // needles is the breakdown of a gap whose electrodes are not described.
@@ -159,11 +159,7 @@ func needles(g gap.Gap, s gas.State) (gap.Answer[quantity.Voltage], error) {
 // crossing is the larger of onset and what sharp electrodes stand: a discharge that
 // starts earlier than it can cross stays a corona. A radius too fine for an onset is
 // sharp.
-func crossing(g gap.Gap, s gas.State, l shape.Line, polarity gap.Polarity, starts gap.Result[quantity.Voltage]) (gap.Answer[quantity.Voltage], error) {
-	law := gas.PointPlane
-	if twoSided(g.Shape.Kind) || polarity == gap.Negative {
-		law = gas.Needles
-	}
+func crossing(s gas.State, l shape.Line, law func(gas.State, quantity.Length) (gap.Answer[quantity.Voltage], error), starts gap.Result[quantity.Voltage]) (gap.Answer[quantity.Voltage], error) {
 	sharp, err := law(s, l.Gap())
 	if err != nil {
 		return gap.Answer[quantity.Voltage]{}, err

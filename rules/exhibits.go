@@ -9,6 +9,8 @@ import (
 // where there is nothing to show.
 func curves(e *evidence.Evidence) []exhibit.Curve {
 	return gather(e,
+		fieldPictures,
+		surfaceCurves,
 		waveforms,
 		nodeWaveforms,
 		diodeWaveforms,
@@ -22,6 +24,7 @@ func curves(e *evidence.Evidence) []exhibit.Curve {
 // tables lists every table of a review in the order of print.
 func tables(e *evidence.Evidence) []exhibit.Table {
 	return gather(e,
+		fieldTables,
 		closedForm,
 		dropByCause,
 		stageVoltages,

@@ -31,7 +31,7 @@ func figures(e *evidence.Evidence) []figure.Figure {
 		once(c, e)
 	}
 	spacings(c, e)
-	fields(c, e)
+	computedFields(c, e)
 	return c.list
 }
 

@@ -5,6 +5,7 @@ import (
 	"kilovet/hv/document"
 	"kilovet/rules/diagram"
 	"kilovet/rules/evidence"
+	"kilovet/rules/fields"
 	"kilovet/rules/local"
 	"kilovet/rules/optics"
 	"kilovet/rules/parts"
@@ -19,7 +20,7 @@ import (
 // All lists every rule, in the order in which findings are given.
 func All() []rule.Rule {
 	var all []rule.Rule
-	for _, family := range [][]rule.Rule{people.Rules(), radiation.Rules(), spacing.Rules(), vessel.Rules(), parts.Rules(), supply.Rules(), optics.Rules()} {
+	for _, family := range [][]rule.Rule{people.Rules(), radiation.Rules(), spacing.Rules(), fields.Rules(), vessel.Rules(), parts.Rules(), supply.Rules(), optics.Rules()} {
 		all = append(all, family...)
 	}
 	return all

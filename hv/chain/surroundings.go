@@ -151,12 +151,15 @@ type Shape struct {
 // Field is an axisymmetric arrangement whose electrostatic field is wanted.
 type Field struct {
 	document.Table
-	Name        document.Given[string] `key:"name" needed:"yes" means:"name of the arrangement" example:"gun feedthrough"`
-	Medium      document.Given[string] `key:"medium" words:"air | gas | vacuum | oil" means:"what fills the space between" example:"vacuum"`
-	Electrodes  []Electrode            `key:"electrodes" needed:"yes" means:"conductors"`
-	Dielectrics []Dielectric           `key:"dielectrics" means:"insulators"`
-	Boundary    []Boundary             `key:"boundary" means:"where the model ends"`
-	Probes      []Probe                `key:"probes" means:"points at which the field is wanted"`
+	Name        document.Given[string]               `key:"name" needed:"yes" means:"name of the arrangement" example:"gun feedthrough"`
+	Medium      document.Given[string]               `key:"medium" words:"air | gas | vacuum | oil" means:"what fills the space between" example:"vacuum"`
+	Gas         document.Given[string]               `key:"gas" words:"air | nitrogen | sulphur hexafluoride | helium | argon | hydrogen | carbon dioxide" means:"gas, where the medium is gas" example:"sulphur hexafluoride"`
+	Pressure    document.Given[quantity.Pressure]    `key:"pressure" range:"> 0 Pa, <= 10 MPa" means:"absolute pressure of the gas" example:"3 bar"`
+	Temperature document.Given[quantity.Temperature] `key:"temperature" range:">= -60 degC, <= 300 degC" means:"temperature of the gas (default: the site's air)" example:"30 degC"`
+	Electrodes  []Electrode                          `key:"electrodes" needed:"yes" means:"conductors"`
+	Dielectrics []Dielectric                         `key:"dielectrics" means:"insulators"`
+	Boundary    []Boundary                           `key:"boundary" means:"where the model ends"`
+	Probes      []Probe                              `key:"probes" means:"points at which the field is wanted"`
 }
 
 // Electrode is a conductor at the potential of a node or at a fixed one.
@@ -171,10 +174,14 @@ type Electrode struct {
 // Dielectric is an insulating body with a closed profile.
 type Dielectric struct {
 	document.Table
-	Name         document.Given[string]               `key:"name" needed:"yes" means:"name of the body" example:"sleeve"`
-	Permittivity document.Given[float64]              `key:"permittivity" range:">= 1, <= 100000" needed:"yes" means:"relative permittivity" example:"9.4"`
-	Resistivity  document.Given[quantity.Resistivity] `key:"resistivity" range:"> 0 ohm m, <= 1e25 ohm m" means:"resistivity" example:"1e12 ohm m"`
-	Profile      []Stroke                             `key:"profile" needed:"yes" means:"closed outline in r and z" example:"[{ from = [\"20 mm\", \"0 mm\"] }, { to = [\"30 mm\", \"0 mm\"] }, { to = [\"30 mm\", \"10 mm\"] }, { to = [\"20 mm\", \"0 mm\"] }]"`
+	Name            document.Given[string]               `key:"name" needed:"yes" means:"name of the body" example:"sleeve"`
+	Permittivity    document.Given[float64]              `key:"permittivity" range:">= 1, <= 100000" needed:"yes" means:"relative permittivity" example:"9.4"`
+	Resistivity     document.Given[quantity.Resistivity] `key:"resistivity" range:"> 0 ohm m, <= 1e25 ohm m" means:"resistivity" example:"1e12 ohm m"`
+	Material        document.Given[string]               `key:"material" means:"what it is made of: its strength is judged" example:"alumina"`
+	Strength        document.Given[quantity.Field]       `key:"strength" range:"> 0 kV/mm, <= 1000 kV/mm" means:"short-time strength of the maker, at tested_thickness" example:"15 kV/mm"`
+	TestedThickness document.Given[quantity.Length]      `key:"tested_thickness" range:"> 0 mm, <= 1 m" means:"thickness that the strength was measured at" example:"3 mm"`
+	Fill            document.Given[string]               `key:"fill" words:"air | vacuum" means:"it is a space that this fills, apart from the medium around" example:"vacuum"`
+	Profile         []Stroke                             `key:"profile" needed:"yes" means:"closed outline in r and z" example:"[{ from = [\"20 mm\", \"0 mm\"] }, { to = [\"30 mm\", \"0 mm\"] }, { to = [\"30 mm\", \"10 mm\"] }, { to = [\"20 mm\", \"0 mm\"] }]"`
 }
 
 // Boundary is where the model ends.

@@ -44,11 +44,10 @@ const (
 	smooths = 30
 )
 
-// adapt divides panels until the unknowns are resolved on every one and the peaks
+// adapt goes on from a division and divides panels until the unknowns are resolved on every one and the peaks
 // stay, and returns the last two solutions: the difference tells what the last
 // division has changed.
-func (s *solver) adapt() (coarse, fine *solved, err error) {
-	panels := s.firstMesh()
+func (s *solver) adapt(panels []*panel) (coarse, fine *solved, err error) {
 	var before, now []float64
 	for range rounds {
 		coarse, before = fine, now

@@ -178,20 +178,36 @@ func (s *solver) strength(v *values, f face, t float64) float64 {
 	return cmplx.Abs(g)
 }
 
-// greatest is the largest field on a face between two places on its panel, and where.
-func (s *solver) greatest(v *values, f face, from, to float64) (t, most float64) {
-	const points = 16
-	best := 0
-	at := func(k int) float64 { return from + (to-from)*float64(k)/points }
-	for k := range points + 1 {
-		if e := s.strength(v, f, at(k)); e > most {
-			best, most = k, e
+// lookPoints are the places at which a panel is looked at before its largest field is
+// searched for.
+const lookPoints = 16
+
+// glance is the largest field on a face at even places between two of its panel.
+type glance struct {
+	face
+	from, to float64
+	best     int
+	most     float64
+}
+
+func (g glance) at(k int) float64 { return g.from + (g.to-g.from)*float64(k)/lookPoints }
+
+func (s *solver) glance(v *values, f face, from, to float64) glance {
+	g := glance{face: f, from: from, to: to}
+	for k := range lookPoints + 1 {
+		if e := s.strength(v, f, g.at(k)); e > g.most {
+			g.best, g.most = k, e
 		}
 	}
-	low, high := at(max(best-1, 0)), at(min(best+1, points))
-	inner := highestPoint(func(t float64) float64 { return s.strength(v, f, t) }, low, high)
-	if e := s.strength(v, f, inner); e > most {
+	return g
+}
+
+// greatest is the largest field on a face, about where a glance saw it.
+func (s *solver) greatest(v *values, g glance) (t, most float64) {
+	low, high := g.at(max(g.best-1, 0)), g.at(min(g.best+1, lookPoints))
+	inner := highestPoint(func(t float64) float64 { return s.strength(v, g.face, t) }, low, high)
+	if e := s.strength(v, g.face, inner); e > g.most {
 		return inner, e
 	}
-	return at(best), math.Abs(most)
+	return g.at(g.best), math.Abs(g.most)
 }

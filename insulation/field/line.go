@@ -12,6 +12,7 @@ import (
 type Line struct {
 	Points []LinePoint
 	Ends   string // the electrode it ends on; empty where it leaves the model
+	Closed bool   // it ends on a dielectric, of that name, and was not followed into it
 }
 
 // LinePoint is a place on a field line.
@@ -35,11 +36,24 @@ func (f *Field) Line(from Peak) (Line, error) {
 	if cmplx.Abs(g) == 0 {
 		return Line{}, lack.Failed("at %v there is no field to follow", from.At)
 	}
-	return f.lineFrom(from.face, from.t, x, u, g)
+	return f.lineFrom(from.face, from.t, x, u, g, false)
 }
 
-func (f *Field) lineFrom(fc face, at float64, x complex128, u float64, g complex128) (Line, error) {
-	t := &tracer{Field: f, region: f.regionOf(fc), along: 1, tolerance: 2e-5}
+// Within is the field line from the place of a peak, on an electrode or on a dielectric,
+// through the body that the peak lies in, to where it leaves that body.
+func (f *Field) Within(from Peak) (Line, error) {
+	if from.face.side < 0 {
+		return Line{}, lack.Range("a field line is drawn from a peak on an electrode or a dielectric")
+	}
+	x, u, g := f.surface(f.values, from.face, from.t)
+	if cmplx.Abs(g) == 0 {
+		return Line{}, lack.Failed("at %v there is no field to follow", from.At)
+	}
+	return f.lineFrom(from.face, from.t, x, u, g, true)
+}
+
+func (f *Field) lineFrom(fc face, at float64, x complex128, u float64, g complex128, within bool) (Line, error) {
+	t := &tracer{Field: f, region: f.regionOf(fc), along: 1, tolerance: 2e-5, within: within}
 	_, path := f.values.sides[fc.side].panel.at(at)
 	if into := path * complex(0, -fc.sign); real(g*cmplx.Conj(into)) < 0 {
 		t.along = -1
@@ -59,6 +73,8 @@ func (f *Field) lineFrom(fc face, at float64, x complex128, u float64, g complex
 	end, err := t.follow(x)
 	if end != nil && end.electrode >= 0 {
 		line.Ends = f.names[end.electrode]
+	} else if end != nil && end.kind == interfaces {
+		line.Ends, line.Closed = f.bodyName(end.left+end.right-t.region), true
 	}
 	return line, err
 }
@@ -84,6 +100,7 @@ const (
 type tracer struct {
 	*Field
 	region    int
+	within    bool       // the line ends where it leaves its region
 	along     complex128 // ±1 with or against the gradient, ±i across it
 	tolerance float64    // of a step, relative
 	longest   func(x, g complex128) float64
@@ -189,7 +206,7 @@ func (t *tracer) crossed(x, next complex128) (first *wall, at complex128) {
 
 // through takes the line beyond a wall, if there is a way.
 func (t *tracer) through(w *wall, at complex128) bool {
-	if w.kind != interfaces {
+	if w.kind != interfaces || t.within {
 		return false
 	}
 	t.region = w.left + w.right - t.region

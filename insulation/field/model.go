@@ -66,23 +66,28 @@ type model struct {
 	regions   []region
 	walls     []wall
 	junctions []junction
-	resistive bool // constants are conductivities, not permittivities
+	resistive bool    // constants are conductivities, not permittivities
+	over      float64 // seconds after a step over which fluxes are averaged; 0: none
 }
 
 // newModel lays out an arrangement and finds what is wrong with it. The error is of
 // type profile.Faults.
 func newModel(a *Arrangement, resistive bool) (*model, error) {
 	m := &model{Arrangement: a, resistive: resistive}
-	if faults := m.draw(); len(faults) > 0 {
+	if faults := m.build(); len(faults) > 0 {
 		return nil, faults
 	}
-	for _, step := range []func() profile.Faults{m.checkPlane, m.findRegions, m.findWalls, m.checkUse} {
+	return m, nil
+}
+
+func (m *model) build() profile.Faults {
+	for _, step := range []func() profile.Faults{m.draw, m.checkPlane, m.findRegions, m.findWalls, m.checkUse} {
 		if faults := step(); len(faults) > 0 {
-			return nil, faults
+			return faults
 		}
 	}
 	m.findJunctions()
-	return m, nil
+	return nil
 }
 
 // draw lays the outlines over each other.

@@ -103,20 +103,31 @@ type spot struct {
 	t float64
 }
 
+// worthwhile is the part of the largest field seen at a glance from which a face is
+// searched: between two places of a glance the field does not rise by as much.
+const worthwhile = 0.9
+
 // greatestOn looks through the faces of walls.
 func (f *Field) greatestOn(v *values, distance float64, on func(*wall) bool, in func(int) bool) (best spot, most float64) {
-	best.side = -1
+	var seen []glance
 	for _, fc := range v.faces() {
 		sd := &v.sides[fc.side]
 		if !on(&f.walls[sd.wall]) || !in(sd.region) {
 			continue
 		}
-		from, to := f.away(sd.panel, distance)
-		if from >= to {
+		if from, to := f.away(sd.panel, distance); from < to {
+			seen = append(seen, f.glance(v, fc, from, to))
+			most = math.Max(most, seen[len(seen)-1].most)
+		}
+	}
+	best.side = -1
+	enough := worthwhile * most
+	for _, g := range seen {
+		if g.most < enough && best.side >= 0 {
 			continue
 		}
-		if t, e := f.greatest(v, fc, from, to); e > most || best.side < 0 {
-			best, most = spot{fc, t}, e
+		if t, e := f.greatest(v, g); e > most || best.side < 0 {
+			best, most = spot{g.face, t}, e
 		}
 	}
 	return best, most

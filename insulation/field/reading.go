@@ -135,7 +135,11 @@ func (f *Field) reading(region int, x complex128, u float64, g complex128) Readi
 type Surface struct {
 	Along           quantity.Length // from the start of the surface
 	Inside, Outside Reading         // outside: of the medium, or of another dielectric
+	along           quantity.Field
 }
+
+// Tangential is the size of the field along the surface, the same on both sides.
+func (s Surface) Tangential() quantity.Field { return s.along }
 
 // Along is the field along the free surfaces of a dielectric, a run for every piece
 // between corners. Close to a sharp edge it rises
@@ -171,6 +175,8 @@ func (f *Field) run(wall int, onLeft bool) (run []Surface) {
 		for _, t := range f.nodes {
 			s := Surface{Along: quantity.Length((sd.panel.start + sd.panel.h*(1+t)/2) * f.unit)}
 			s.Inside, s.Outside = f.readSurface(face{i, -1}, t), f.readSurface(face{i + 1, 1}, t)
+			b := f.basis(t)
+			s.along = quantity.Field(math.Abs(b.dot(&v.slope[i])) / f.unit)
 			if !onLeft {
 				s.Inside, s.Outside = s.Outside, s.Inside
 			}

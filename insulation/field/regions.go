@@ -59,9 +59,16 @@ func (m *model) whyDead() string {
 
 // constant is what the flux in a material is proportional to.
 func (m *model) constant(material int) float64 {
-	if m.resistive {
+	switch {
+	case m.resistive:
 		return m.conductivity(material)
+	case m.over > 0: // ε + σ T/ε₀: the transform of displacement and current
+		return m.permittivity(material) + m.leak(material)*m.over/vacuumPermittivity
 	}
+	return m.permittivity(material)
+}
+
+func (m *model) permittivity(material int) float64 {
 	if material > 0 {
 		return m.Dielectrics[material-1].Permittivity
 	}

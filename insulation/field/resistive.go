@@ -14,6 +14,21 @@ const perfect = 1e-9
 // dielectrics need a resistivity; the medium counts as a perfect insulator unless it
 // has one. A body that conducts but touches no electrode has no potential of its own.
 func SolveResistive(a Arrangement) (*Solution, error) {
+	if err := leaks(&a); err != nil {
+		return nil, err
+	}
+	m, err := newModel(&a, true)
+	if err != nil {
+		return nil, err
+	}
+	if err := m.held(); err != nil {
+		return nil, err
+	}
+	return m.solution()
+}
+
+// leaks reports the resistivities that are wanting, or are none.
+func leaks(a *Arrangement) error {
 	var missing []string
 	for _, d := range a.Dielectrics {
 		if d.Resistivity == 0 {
@@ -21,34 +36,39 @@ func SolveResistive(a Arrangement) (*Solution, error) {
 		}
 	}
 	if len(missing) > 0 || len(a.Dielectrics) == 0 && a.Resistivity == 0 {
-		return nil, lack.Key(append(missing, "resistivity")...)
+		return lack.Key(append(missing, "resistivity")...)
 	}
 	for _, d := range a.Dielectrics {
 		if !(d.Resistivity > 0) || a.Resistivity < 0 {
-			return nil, lack.Range("a resistivity is positive")
+			return lack.Range("a resistivity is positive")
 		}
 	}
-	m, err := newModel(&a, true)
-	if err != nil {
-		return nil, err
-	}
-	if name := m.floating(); name != "" {
-		return nil, lack.Range("%s conducts, but touches no electrode: what it is charged to is not known", name)
-	}
-	return m.solution()
+	return nil
 }
 
-// conductivity of a material, relative to the best.
-func (m *model) conductivity(material int) float64 {
-	best := m.bestConductivity()
+// held reports a body that conducts and has no potential of its own.
+func (m *model) held() error {
+	if name := m.floating(); name != "" {
+		return lack.Range("%s conducts, but touches no electrode: what it is charged to is not known", name)
+	}
+	return nil
+}
+
+// leak is the conductivity of a material in S/m, 0 of a perfect insulator.
+func (m *model) leak(material int) float64 {
 	rho := m.Resistivity
 	if material > 0 {
 		rho = m.Dielectrics[material-1].Resistivity
 	}
 	if rho == 0 {
-		return perfect
+		return 0
 	}
-	return max(1/float64(rho)/best, perfect)
+	return 1 / float64(rho)
+}
+
+// conductivity of a material, relative to the best.
+func (m *model) conductivity(material int) float64 {
+	return max(m.leak(material)/m.bestConductivity(), perfect)
 }
 
 // bestConductivity of all materials, in S/m.

@@ -33,12 +33,13 @@ func Solve(a Arrangement) (*Solution, error) {
 }
 
 func (m *model) solution() (*Solution, error) {
-	constants := make([]float64, len(m.regions))
-	for i, r := range m.regions {
-		constants[i] = r.constant
-	}
-	s := newSolver(m, constants)
-	coarse, fine, err := s.adapt()
+	s := newSolver(m)
+	return s.solution(s.firstMesh())
+}
+
+// solution refines a first division.
+func (s *solver) solution(panels []*panel) (*Solution, error) {
+	coarse, fine, err := s.adapt(panels)
 	if err != nil {
 		return nil, err
 	}
@@ -79,6 +80,12 @@ func (s *Solution) Under(potentials map[string]quantity.Voltage) (*Field, error)
 	}
 	f.values, f.less = s.superpose(s.fine, f.volts), s.superpose(s.coarse, f.volts)
 	return f, nil
+}
+
+// Range is the lowest and the highest potential of all electrodes.
+func (f *Field) Range() (low, high quantity.Voltage) {
+	low, high = quantity.Voltage(slices.Min(f.volts)), quantity.Voltage(slices.Max(f.volts))
+	return low, high
 }
 
 func (s *Solution) checkPotentials(potentials map[string]quantity.Voltage) error {
@@ -246,6 +253,9 @@ func (m *model) body(name string) (int, error) {
 func (m *model) outer(x complex128) profile.Point {
 	if math.Abs(real(x)) < 1e-12 {
 		x = complex(0, imag(x))
+	}
+	if math.Abs(imag(x)) < 1e-12 {
+		x = complex(real(x), 0)
 	}
 	return profile.Point{R: quantity.Length(real(x) * m.unit), Z: quantity.Length(imag(x) * m.unit)}
 }

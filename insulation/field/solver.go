@@ -50,8 +50,11 @@ type solver struct {
 	work      Work
 }
 
-func newSolver(m *model, constants []float64) *solver {
-	s := &solver{model: m, constants: constants, blocks: map[[2]int]*block{}}
+func newSolver(m *model) *solver {
+	s := &solver{model: m, constants: make([]float64, len(m.regions)), blocks: map[[2]int]*block{}}
+	for i, r := range m.regions {
+		s.constants[i] = r.constant
+	}
 	s.quadrature = newQuadrature()
 	if m.mirror != nil {
 		s.mirrored, s.mirrorZ, s.parity = true, float64(m.mirror.z)/m.unit, 1

@@ -67,3 +67,20 @@ func SurfaceFactor(s gap.Surface) (quantity.Fraction, gap.Source, error) {
 	}
 	return 0, source, lack.Range("no surface factor is known here for %q", string(s))
 }
+
+// Growth is the streamer integral along a critical line at a voltage by the coefficient
+// that judges in the gas, 1 at onset.
+func Growth(s State, l shape.Line, v quantity.Voltage) (float64, error) {
+	law, err := ionisationOf(s.Gas)
+	if err != nil {
+		return 0, err
+	}
+	return law.Growth(l, s.Density(), v)
+}
+
+// Critical is the field at or under which the gas does not ionise: 24.22 kV/cm of air
+// at normal density, in proportion to the density.
+func Critical(s State) (quantity.Field, gap.Source, error) {
+	law, err := ionisationOf(s.Gas)
+	return law.critical * quantity.Field(s.Density()), law.Source, err
+}

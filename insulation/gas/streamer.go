@@ -41,6 +41,12 @@ func (i Ionisation) Onset(l shape.Line, density quantity.Fraction) (quantity.Vol
 	return quantity.Voltage(v), nil
 }
 
+// Growth is the streamer integral ∫ α/K dx along a critical line at a voltage, 1 where an
+// avalanche grows to a streamer.
+func (i Ionisation) Growth(l shape.Line, density quantity.Fraction, v quantity.Voltage) (float64, error) {
+	return i.along(l, density).growth(float64(v))
+}
+
 // track is a critical line in a gas of some density.
 type track struct {
 	Ionisation

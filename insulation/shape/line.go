@@ -24,7 +24,9 @@ type Line struct {
 	radius quantity.Length // over which the field falls; the gap where it is uniform
 	trough quantity.Length // where the field is least
 	bound  bool            // the field is an upper bound, not exact
-	at     func(x float64) float64
+	// computed lines come from a field that was worked out, not from an ideal shape.
+	computed bool
+	at       func(x float64) float64
 }
 
 // Gap is the length of the critical line.
@@ -39,6 +41,9 @@ func (l Line) Trough() quantity.Length { return l.trough }
 
 // Bound reports whether the field is an upper bound and not exact.
 func (l Line) Bound() bool { return l.bound }
+
+// Computed reports whether the line comes from a computed field.
+func (l Line) Computed() bool { return l.computed }
 
 // PerVolt is the field at x from the stressed electrode for each volt, 0 ≤ x ≤ gap.
 func (l Line) PerVolt(x quantity.Length) PerLength { return PerLength(l.at(float64(x))) }

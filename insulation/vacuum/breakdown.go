@@ -5,6 +5,7 @@ import (
 
 	"kilovet/hv/quantity"
 	"kilovet/insulation/gap"
+	"kilovet/insulation/shape"
 )
 
 // Short gaps break down at a field, long ones at a product of voltage and field.
@@ -53,6 +54,19 @@ func Breakdown(g gap.Gap) (gap.Answer[quantity.Voltage], error) {
 	}
 	s, err := stateOf(g)
 	return s.applied(law(x)), err
+}
+
+// BreakdownAlong is Breakdown of a critical line whose field was computed; of the gap its
+// surfaces are read.
+func BreakdownAlong(g gap.Gap, l shape.Line) (gap.Answer[quantity.Voltage], error) {
+	if err := inRange(l.Gap()); err != nil {
+		return gap.Answer[quantity.Voltage]{}, err
+	}
+	s, err := stateOf(g)
+	if err != nil {
+		return gap.Answer[quantity.Voltage]{}, err
+	}
+	return s.applied(law(quantity.Length(1 / float64(l.PerVolt(0))))), nil
 }
 
 // law joins the two laws over the even length of a gap.

@@ -3,6 +3,7 @@ package vacuum
 import (
 	"kilovet/hv/quantity"
 	"kilovet/insulation/gap"
+	"kilovet/insulation/shape"
 )
 
 // Onset is the voltage at which a vacuum gap begins to carry current: the field at the
@@ -14,6 +15,19 @@ func Onset(g gap.Gap) (gap.Answer[quantity.Voltage], error) {
 	if err != nil {
 		return gap.Answer[quantity.Voltage]{}, err
 	}
+	return onset(g, x)
+}
+
+// OnsetAlong is Onset of a critical line whose field was computed; of the gap its
+// surfaces are read.
+func OnsetAlong(g gap.Gap, l shape.Line) (gap.Answer[quantity.Voltage], error) {
+	if err := inRange(l.Gap()); err != nil {
+		return gap.Answer[quantity.Voltage]{}, err
+	}
+	return onset(g, quantity.Length(1/float64(l.PerVolt(0))))
+}
+
+func onset(g gap.Gap, x quantity.Length) (gap.Answer[quantity.Voltage], error) {
 	s, err := stateOf(g)
 	if err != nil {
 		return gap.Answer[quantity.Voltage]{}, err

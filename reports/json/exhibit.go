@@ -15,6 +15,7 @@ type (
 		Lines   []polyline      `json:"lines"`
 		Marks   []spot          `json:"marks"`
 		Levels  []level         `json:"levels"`
+		Areas   []area          `json:"areas"`
 		Basis   string          `json:"basis"`
 		Note    string          `json:"note"`
 	}
@@ -26,6 +27,12 @@ type (
 	polyline struct {
 		Name   string       `json:"name"`
 		Points [][2]float64 `json:"points"`
+		Kind   exhibit.Kind `json:"kind,omitempty"`
+	}
+	area struct {
+		Name  string          `json:"name"`
+		Share float64         `json:"share"`
+		Boxes [][2][2]float64 `json:"boxes"`
 	}
 	spot struct {
 		Name string     `json:"name"`
@@ -56,13 +63,18 @@ func curveOf(c exhibit.Curve) curve {
 	return curve{
 		ID: c.ID, Subject: c.Subject, Chapter: c.Chapter, Title: c.Title, X: axis(c.X), Y: axis(c.Y),
 		Lines: each(c.Lines, func(l exhibit.Line) polyline {
-			return polyline{l.Name, each(l.Points, func(p exhibit.Point) [2]float64 { return [2]float64{p.X, p.Y} })}
+			return polyline{l.Name, each(l.Points, pair), l.Kind}
 		}),
 		Marks:  each(c.Marks, func(m exhibit.Mark) spot { return spot{m.Name, [2]float64{m.X, m.Y}} }),
 		Levels: each(c.Levels, func(l exhibit.Level) level { return level(l) }),
-		Basis:  c.Basis, Note: c.Note,
+		Areas: each(c.Areas, func(a exhibit.Area) area {
+			return area{a.Name, a.Share, each(a.Boxes, func(b [2]exhibit.Point) [2][2]float64 { return [2][2]float64{pair(b[0]), pair(b[1])} })}
+		}),
+		Basis: c.Basis, Note: c.Note,
 	}
 }
+
+func pair(p exhibit.Point) [2]float64 { return [2]float64{p.X, p.Y} }
 
 func tableOf(t exhibit.Table) table {
 	return table{

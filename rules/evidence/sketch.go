@@ -3,6 +3,7 @@ package evidence
 import (
 	"errors"
 	"fmt"
+	"math"
 	"slices"
 
 	"kilovet/hv/chain"
@@ -10,6 +11,7 @@ import (
 	"kilovet/hv/profile"
 	"kilovet/hv/quantity"
 	"kilovet/insulation/field"
+	"kilovet/rules/build"
 )
 
 // sketch is a described arrangement as outlines, with where they are described.
@@ -101,4 +103,37 @@ func named(f *chain.Field, name string) document.Place {
 		}
 	}
 	return f.Here()
+}
+
+// Drawn is the outline of a body as a path of straight pieces, arcs by five degrees.
+type Drawn struct {
+	Body   string
+	Points []profile.Point
+}
+
+// Outlines are those of the electrodes and dielectrics of an arrangement.
+func Outlines(f *build.Arrangement) (all []Drawn) {
+	s := sketchOf(&f.Field)
+	add := func(body string, p profile.Profile) {
+		d := Drawn{Body: body}
+		for i, seg := range p.Segments {
+			if i == 0 {
+				d.Points = append(d.Points, seg.From)
+			}
+			pieces := 1 + int(math.Abs(float64(seg.Sweep()))*36/math.Pi)
+			for k := range pieces {
+				d.Points = append(d.Points, seg.At(float64(k+1)/float64(pieces)))
+			}
+		}
+		all = append(all, d)
+	}
+	for _, el := range s.Electrodes {
+		for _, p := range el.Profiles {
+			add(el.Name, p)
+		}
+	}
+	for _, d := range s.Dielectrics {
+		add(d.Name, d.Profile)
+	}
+	return all
 }

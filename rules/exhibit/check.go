@@ -14,6 +14,13 @@ func (c Curve) Check() error {
 			}
 		}
 	}
+	for _, a := range c.Areas {
+		for _, b := range a.Boxes {
+			if !c.X.holds(b[0].X) || !c.X.holds(b[1].X) || !c.Y.holds(b[0].Y) || !c.Y.holds(b[1].Y) || !(a.Share >= 0 && a.Share <= 1) {
+				return fmt.Errorf("exhibit: curve %s of %q: area %q cannot be shown", c.ID, c.Subject, a.Name)
+			}
+		}
+	}
 	for _, m := range c.Marks {
 		if !c.X.holds(m.X) || !c.Y.holds(m.Y) {
 			return fmt.Errorf("exhibit: curve %s of %q: mark %q at (%g, %g) cannot be shown", c.ID, c.Subject, m.Name, m.X, m.Y)

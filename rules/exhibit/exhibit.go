@@ -31,6 +31,7 @@ type Curve struct {
 	Lines   []Line
 	Marks   []Mark
 	Levels  []Level
+	Areas   []Area // drawn under the lines
 	Basis   string // how it was obtained
 	Note    string // what a reader must know; may be empty
 	// Detail marks what is for whoever looks closely: a renderer short of room may leave
@@ -49,6 +50,26 @@ type Axis struct {
 type Line struct {
 	Name   string
 	Points []Point
+	Kind   Kind
+}
+
+// Kind says what a line of a picture is, for whoever draws it with a stroke of its own;
+// lines of one kind and name belong together. A line of a plain curve has none.
+type Kind string
+
+// The kinds of lines.
+const (
+	Outline       Kind = "outline"       // of a body
+	Equipotential Kind = "equipotential" // named by its potential
+	CriticalLine  Kind = "critical line" // along which a gap would break down
+)
+
+// Area is a part of a picture shaded to a share, 0 white to 1 darkest, by hatching or
+// tone: boxes from their lower left to their upper right corner.
+type Area struct {
+	Name  string
+	Share float64
+	Boxes [][2]Point
 }
 
 // Point is a place in the units of the axes.

@@ -12,7 +12,7 @@ import (
 
 // Rules lists the rules of this family.
 func Rules() []rule.Rule {
-	return []rule.Rule{described, clearance, creepage, breakdown, corona, junction, annulus, weakest, fieldStrength}
+	return []rule.Rule{described, clearance, creepage, breakdown, corona, junction, annulus, weakest}
 }
 
 func finding(id string, concern rule.Concern, relation rule.Relation, s *chain.Spacing) rule.Finding {

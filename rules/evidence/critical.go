@@ -1,0 +1,112 @@
+package evidence
+
+import (
+	"fmt"
+	"math"
+
+	"kilovet/hv/lack"
+	"kilovet/hv/quantity"
+	"kilovet/insulation"
+	"kilovet/insulation/field"
+	"kilovet/insulation/gap"
+	"kilovet/insulation/shape"
+	"kilovet/rules/build"
+)
+
+// Critical is the critical line of a greatest field: the field line from its place to
+// where it leaves the body, and what the body stands along it.
+type Critical struct {
+	Stress
+	Traced      field.Line
+	Line        shape.Line
+	Volts       quantity.Voltage // across the line at this stress, a magnitude
+	Polarity    gap.Polarity     // of the electrode it starts from; unknown on a dielectric
+	Strength    insulation.Strength
+	Positive    gap.Result[quantity.Voltage] // breakdown with the start positive
+	Negative    gap.Result[quantity.Voltage] // and negative
+	Streamer    quantity.Fraction            // integral at this stress, 1 where a discharge starts; 0 in vacuum
+	HasIntegral bool
+}
+
+// Critical is the critical line of the greatest field somewhere in the medium of an
+// arrangement or in a space that another fills.
+func (e *Evidence) Critical(f *build.Arrangement, w Where) (Critical, error) {
+	key := fmt.Sprintf("critical line %s %v", f.Name.V, w)
+	return remember(e.Under(Condition{}), key, func() (Critical, error) {
+		s, err := e.Stress(f, w)
+		if err != nil {
+			return Critical{}, err
+		}
+		c := Critical{Stress: s}
+		if c.Traced, err = s.Field.Within(s.Peak); err != nil {
+			return c, err
+		}
+		if c.Line, err = lineOf(c.Traced); err != nil {
+			return c, err
+		}
+		c.Volts, c.Polarity = across(c.Traced, w, f)
+		g := e.Filling(f, s.Body)
+		c.Strength = insulation.StrengthAlong(g, c.Line, c.Polarity)
+		c.Positive = insulation.StrengthAlong(g, c.Line, gap.Positive).Breakdown
+		c.Negative = insulation.StrengthAlong(g, c.Line, gap.Negative).Breakdown
+		c.Streamer, err = insulation.StreamerAlong(g, c.Line, c.Volts)
+		c.HasIntegral = err == nil
+		return c, nil
+	})
+}
+
+// lineOf is a traced line as a critical one.
+func lineOf(l field.Line) (shape.Line, error) {
+	samples := make([]shape.Sample, len(l.Points))
+	for i, p := range l.Points {
+		samples[i] = shape.Sample{Along: p.Along, Field: p.Strength}
+	}
+	if l.Ends == "" {
+		return shape.Line{}, lack.Failed("the field line from there leaves the model")
+	}
+	return shape.Sampled(samples)
+}
+
+// across is the voltage between the ends of a line, and the polarity of its start where
+// that is an electrode whose sign is described.
+func across(l field.Line, w Where, f *build.Arrangement) (quantity.Voltage, gap.Polarity) {
+	v := l.Points[0].Potential - l.Points[len(l.Points)-1].Potential
+	polarity := gap.Negative
+	if v > 0 {
+		polarity = gap.Positive
+	}
+	if w.Beside != "" || f.From == "feedthrough" && f.Electrodes[0].Voltage.Set() {
+		polarity = gap.Unknown
+	}
+	return quantity.Voltage(math.Abs(float64(v))), polarity
+}
+
+// Filling is what fills a body of an arrangement, as insulation reads it.
+func (e *Evidence) Filling(f *build.Arrangement, body string) gap.Gap {
+	g := gap.Gap{Medium: gap.Medium(f.Medium.Or("vacuum")), Gas: gap.Gas(f.Gas.V), Pressure: f.Pressure.V, Temperature: f.Temperature.V}
+	for _, d := range f.Dielectrics {
+		if d.Name.V == body && d.Fill.Set() {
+			g = gap.Gap{Medium: gap.Medium(d.Fill.V)}
+		}
+	}
+	if site := e.chain.Site; site != nil {
+		if site.Altitude.Set() {
+			g.Altitude = &site.Altitude.V
+		}
+		if g.Temperature == 0 {
+			g.Temperature = site.AirTemperature.V
+		}
+	}
+	return g
+}
+
+// Open reports whether a body of an arrangement is the medium or a space that gas or
+// vacuum fills, and no solid.
+func Open(f *build.Arrangement, body string) bool {
+	for _, d := range f.Dielectrics {
+		if d.Name.V == body {
+			return d.Fill.Set()
+		}
+	}
+	return true
+}

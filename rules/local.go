@@ -11,11 +11,16 @@ import (
 
 // ReadLocal reads a file of local limits.
 func ReadLocal(data []byte) (*local.File, document.Faults) {
+	return local.Read(data, ids())
+}
+
+// ids are the names of all rules.
+func ids() []string {
 	var ids []string
 	for _, r := range All() {
 		ids = append(ids, r.ID)
 	}
-	return local.Read(data, ids)
+	return ids
 }
 
 // under judges the findings of a review anew by local limits.

@@ -1,6 +1,8 @@
 package rules
 
 import (
+	"slices"
+
 	"kilovet/hv/chain"
 	"kilovet/hv/document"
 	"kilovet/rules/diagram"
@@ -49,7 +51,7 @@ func RunUnder(c *chain.Chain, inputs []Input, program Program, limits *local.Fil
 		return nil, faults
 	}
 	r.Figures = figures(e)
-	r.Curves, r.Tables = curves(e), append(localTable(r.Local), tables(e)...)
+	r.Curves, r.Tables = curves(e), slices.Concat(dispositionTable(c, r.Findings), localTable(r.Local), tables(e))
 	r.Diagram = diagram.Of(e, r.Findings)
 	r.Cautions = cautions(c)
 	r.Assumptions = assumptions(e, r.Findings)

@@ -114,7 +114,7 @@ func root(w world) *cobra.Command {
 	command.SetIn(w.in)
 	command.SetOut(w.out)
 	command.SetErr(w.err)
-	command.AddCommand(reviewCommand(w), basisCommand(w), draftCommand(w), schemaCommand(w), compareCommand(w), showCommand(w), spacingCommand(w), planCommand(w), readingsCommand(w), manualCommand(w))
+	command.AddCommand(reviewCommand(w), basisCommand(w), draftCommand(w), schemaCommand(w), compareCommand(w), showCommand(w), spacingCommand(w), planCommand(w), readingsCommand(w), manualCommand(w), signoffCommand(w), verifyCommand(w))
 	command.SetHelpFunc(func(c *cobra.Command, _ []string) { w.help(c) })
 	plainly(command)
 	return command
@@ -123,13 +123,13 @@ func root(w world) *cobra.Command {
 const begin = `  kilovet review                               the built-in example
   kilovet draft > chain.toml                   a description to fill in
   kilovet review chain.toml                    what stands against switching on
-  kilovet review --pdf review.pdf chain.toml   sheets to read, file and sign
+  kilovet review --pdf review.pdf chain.toml   sheets to read and file
   kilovet show chain.toml                      a page that follows the file
   kilovet basis                                the rules`
 
 const about = `kilovet reads the description of a high-voltage supply chain, computes what will
 happen when it is switched on, judges that against named rules, and writes a
-review and a sheet to sign.
+review and, when nothing stands against it, a sheet to sign.
 
 Exit status: 0 nothing fails and nothing is unassessed; 1 something does; 2 the
 description or the command line cannot be used; 3 a file could not be read or

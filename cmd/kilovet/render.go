@@ -17,6 +17,11 @@ import (
 // sheetFlags are the flags of the page and of the paper.
 func (r *reviewing) sheetFlags(command *cobra.Command) {
 	command.Flags().StringVar(&r.html, "html", "", "write one page for the browser to `FILE`; it loads nothing")
+	r.paperFlag(command)
+}
+
+// paperFlag is the flag of the paper alone.
+func (r *reviewing) paperFlag(command *cobra.Command) {
 	command.Flags().StringVar(&r.paper, "paper", string(pdf.A4), "set the sheets on this `PAPER`: "+strings.Join(words(pdf.Papers), " or "))
 	_ = command.RegisterFlagCompletionFunc("paper", func(*cobra.Command, []string, string) ([]string, cobra.ShellCompDirective) {
 		return words(pdf.Papers), cobra.ShellCompDirectiveNoFileComp
@@ -31,7 +36,7 @@ func (r *reviewing) sheetsUsable() error {
 		return exitf(unusable, "sheets are not written to standard output; name a file, as in --pdf review.pdf")
 	case r.html == "-":
 		return exitf(unusable, "a page is not written to standard output; name a file, as in --html page.html")
-	case !slices.Contains(pdf.Papers, pdf.Paper(r.paper)):
+	case r.paper != "" && !slices.Contains(pdf.Papers, pdf.Paper(r.paper)):
 		return exitf(unusable, "--paper %s: no such paper; choose from %s", r.paper, strings.Join(words(pdf.Papers), ","))
 	}
 	return nil
@@ -97,8 +102,10 @@ func (r *reviewing) writable(args []string) error {
 // distinct refuses outputs that would overwrite each other or the description.
 func (r *reviewing) distinct(args []string) error {
 	paths := slices.DeleteFunc([]string{r.pdf, r.html, r.json}, func(p string) bool { return p == "" || p == "-" })
-	if len(args) == 1 && args[0] != "-" {
-		paths = append(paths, args[0])
+	for _, given := range args {
+		if given != "-" {
+			paths = append(paths, given)
+		}
 	}
 	if r.local != "" && r.local != "-" {
 		paths = append(paths, r.local)

@@ -37,7 +37,7 @@ func reviewCommand(w world) *cobra.Command {
 	r := &reviewing{world: w}
 	command := &cobra.Command{
 		Use:     "review [CHAIN.toml]",
-		Short:   "Review a description: text, a PDF to sign, JSON",
+		Short:   "Review a description: text, sheets, JSON",
 		Long:    aboutReview,
 		Example: reviewExamples,
 		Args:    cobra.MaximumNArgs(1),
@@ -64,7 +64,7 @@ file could not be read or written; 4 the program itself failed.`
 
 const reviewExamples = `  kilovet review chain.toml                    one screen
   kilovet review --all chain.toml              every figure, finding and source
-  kilovet review --pdf review.pdf chain.toml   sheets to read, file and sign
+  kilovet review --pdf review.pdf chain.toml   sheets to read and file
   kilovet review --html page.html chain.toml   one page for the browser
   kilovet review --json - chain.toml           results for other programs
   kilovet review --local house.toml chain.toml under a stricter local code

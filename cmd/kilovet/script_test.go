@@ -27,7 +27,7 @@ func TestScripts(t *testing.T) {
 		Dir:                 "testdata/script",
 		RequireExplicitExec: true,
 		RequireUniqueNames:  true,
-		Cmds:                map[string]func(*testscript.TestScript, bool, []string){"status": status, "replace": replace, "valid": valid, "same": identical},
+		Cmds:                map[string]func(*testscript.TestScript, bool, []string){"status": status, "replace": replace, "valid": valid, "same": identical, "appended": appended, "verified": verified, "damaged": damaged},
 		Setup: func(e *testscript.Env) error {
 			_, column := kilovet.Example()
 			gap, err := os.ReadFile("testdata/gap.toml")

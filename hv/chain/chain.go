@@ -51,6 +51,7 @@ type Chain struct {
 	Spacings   []Spacing   `key:"spacing" means:"a gap with its surfaces"`
 	Parts      []Part      `key:"part" means:"anything else between two nodes"`
 	Fields     []Field     `key:"field" means:"axisymmetric arrangement of electrodes and dielectrics"`
+	Accepted   []Accepted  `key:"accepted" means:"what is to become of an open point of the review when people sign"`
 
 	Feedthroughs []Feedthrough `key:"feedthrough" means:"conductor through the hole of a plate"`
 	Instruments  []Instrument  `key:"instrument" means:"what is read at the first switching on, beside the meter of the divider"`

@@ -29,6 +29,7 @@ var checks = []Check{
 	{"shape", "a shape has the sizes of its kind, and they agree with the clearance", checkShapes},
 	{"electrode", "an electrode has the potential of a node or a fixed one", checkElectrodes},
 	{"profile", "a profile starts at a point and goes on by lines and arcs", checkProfiles},
+	{"accepted", "an open point has one disposition, and a measurement is recorded where one answers it", checkAccepted},
 }
 
 func checkPurpose(s *survey) {

@@ -29,6 +29,28 @@ supply = "dc"
 
 // faulty are documents whose comments say what is wrong across their keys.
 var faulty = map[string]string{
+	"dispositions": whole + `
+[[accepted]]
+rule = "spacing.corona"
+disposition = "measured" # FAULT 15 accepted: measured, without record; give record # FAULT 15 accepted: without measurement
+name = "A. N. Other"
+reason = "it is quiet"
+[[accepted]]
+rule = "drive.headroom"
+subject = "drive"
+disposition = "waved through" # FAULT 15 word: not an accepted word
+name = "A. N. Other"
+reason = "it holds"
+[[accepted]] # FAULT 1 accepted: a second disposition of the same point; keep one; the first is on line
+rule = "drive.headroom"
+subject = "drive"
+disposition = "accepted"
+name = "A. N. Other"
+reason = "it holds"
+[[accepted]] # FAULT 1 missing: accepted.name # FAULT 1 missing: accepted.reason
+rule = "drive.headroom"
+disposition = "accepted"
+`,
 	"nothing to review": `format = 1  # FAULT 1 purpose: there is nothing to review; describe [drive] and [multiplier], a [[spacing]], a [[feedthrough]] or a [[field]]
 #^ a site is no chain
 [site]

@@ -165,7 +165,7 @@ func TestSheetsHoldEveryFindingFigureAndInput(t *testing.T) {
 }
 
 func names(r *rules.Review) []string {
-	all := append([]string{r.Deference, r.Program.Version, "Prepared", "Checked", "Approved"}, r.Assumptions...)
+	all := append([]string{r.Deference, r.Program.Version, "kilovet signoff"}, r.Assumptions...)
 	for _, f := range r.Findings {
 		all = append(all, f.Rule, f.Subject, f.Because, f.Remedy, f.Under)
 		for _, s := range f.Sources {

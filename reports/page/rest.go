@@ -139,16 +139,13 @@ func factsOf[T any](list []T, fact func(T) Fact) []Block {
 	return []Block{Facts{facts}}
 }
 
-// signing is the last section: what was reviewed, by what, and who answers for it.
+// signing is the last section: what was read and by what, and where the sheet is that
+// people sign.
 func signing(r *rules.Review) Section {
-	t := Table{Columns: []Column{{Title: "Read", Share: 0.15}, {Title: "File", Share: 0.23}, {Title: "SHA-256", Share: 0.62}}}
-	for _, in := range r.Inputs {
-		t.Rows = append(t.Rows, Row{Cells: []Cell{lines(plain(in.Role)), lines(plain(in.Name)), lines(small(in.SHA256))}})
-	}
 	return Section{Title: "Sign-off", Anchor: "sign-off", Whole: true, Blocks: []Block{
-		Paragraph{"The signatures below are for the files named here by their SHA-256, as reviewed by " + r.Program.Name + " " + r.Program.Version + ". A file changed afterwards needs a new review."},
-		t,
+		Paragraph{"This review is for the files named here by their SHA-256, as read by " + r.Program.Name + " " + r.Program.Version + ". A file changed afterwards needs a new review."},
+		inputTable(r.Inputs),
 		Notice{r.Deference},
-		Signatures{[]Blank{{"Prepared", r.Heading.Creator}, {"Checked", ""}, {"Approved", r.Heading.Approver}}},
+		Paragraph{"A review is read, not signed. The one sheet that people sign is written by kilovet signoff, and only when nothing that concerns life fails and every other open point has a disposition, a name and a reason."},
 	}}
 }

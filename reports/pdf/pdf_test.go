@@ -165,16 +165,25 @@ func TestEverySheetBearsItsNumberAndTheTitleBlock(t *testing.T) {
 func TestSignaturesStandWithWhatTheySign(t *testing.T) {
 	f := testFonts(t)
 	for name, r := range samples {
-		sheets := sheetsOf(f, page.New(r))
+		const code = "7Q2M4K-9XB3TD-W0ZA5E"
+		sheets := sheetsOf(f, page.SignOff(r, rules.SignOff{Code: code}, page.Issue{Date: "2025-03-04"}))
 		last := strings.Join(words(sheets[len(sheets)-1]), " ")
-		for _, want := range []string{"Sign-off", "Prepared", "Checked", "Approved"} {
+		for _, want := range []string{"Signatures", "Prepared", "Checked", "Approved"} {
 			if !strings.Contains(last, want) {
 				t.Errorf("%s: %q is not on the last sheet", name, want)
 			}
 		}
+		all := ""
+		for i, s := range sheets {
+			text := strings.Join(words(s), " ")
+			if !strings.Contains(text, code) {
+				t.Errorf("%s: the code is not on sheet %d", name, i+1)
+			}
+			all += text
+		}
 		for _, in := range r.Inputs {
-			if !strings.Contains(last, in.SHA256) {
-				t.Errorf("%s: the digest of %s is not on the last sheet", name, in.Name)
+			if !strings.Contains(all, in.SHA256) {
+				t.Errorf("%s: the digest of %s is on no sheet", name, in.Name)
 			}
 		}
 	}

@@ -88,7 +88,7 @@ func ending(w *writer, r *rules.Review) {
 	}
 	w.wrap(r.Deference)
 	if !w.all {
-		w.wrap("Every figure, finding and source: --all. A sheet to sign: --pdf FILE.")
+		w.wrap("Every figure, finding and source: --all. The sheet to sign: kilovet signoff.")
 	}
 }
 

@@ -1,0 +1,4 @@
+package signoff
+
+// Written is written, for its tests.
+var Written = written

@@ -37,7 +37,7 @@ func newEnvelope(s *shooter) *envelope {
 // What a leap may be wrong by: a part of the state where time matters, a part of
 // the leap where it is only to lead nearer to rest.
 const (
-	deviation = 2e-3
+	deviation = 4e-3
 	detour    = 0.3
 )
 
@@ -57,6 +57,10 @@ func (e *envelope) here(g grade) error {
 // shortens the leap until the two orders of the method agree well enough.
 func (e *envelope) advance(most float64) error {
 	e.leap = math.Max(1, math.Min(math.Floor(e.leap), most))
+	if !e.hurried && e.leap == 1 {
+		e.single()
+		return nil
+	}
 	for {
 		wrong, err := e.try()
 		if err != nil {
@@ -82,6 +86,18 @@ func (e *envelope) advance(most float64) error {
 		}
 		e.leap = math.Max(1, math.Floor(e.leap*math.Max(0.2, more)))
 	}
+}
+
+// single takes one period as it was walked and foresees the next leap from how much
+// its change differs from that of the period before.
+func (e *envelope) single() {
+	copy(e.x, e.from)
+	axpy(1, e.start, e.x)
+	e.periods++
+	axpy(-1, e.start, e.k1)
+	limit := deviation * (norm(e.x) + e.pace.energy)
+	e.leap = math.Min(2, math.Sqrt(2*limit/(norm(e.k1)+1e-30)))
+	copy(e.k1, e.start)
 }
 
 // relax walks a single period after a leap, which leaves the swift modes less exact
@@ -134,5 +150,5 @@ func (e *envelope) resolve(b []float64) {
 	}, func(x []float64) {
 		e.precondition(x)
 		scaleBy(x, 1/e.ahead)
-	}, 1e-3)
+	}, 0.1)
 }

@@ -168,7 +168,7 @@ func (w *walker) polish(h float64, target int) float64 {
 	p := w.excess(target)
 	for range 3 {
 		step := p.at(1) / p.slope(1) * h
-		if math.Abs(p.at(1)) <= 1e-5*w.slack[target] || !(math.Abs(step) < 0.1*h) {
+		if math.Abs(p.at(1)) <= 1e-2*w.slack[target] || !(math.Abs(step) < 0.1*h) {
 			break
 		}
 		w.try(h - step)

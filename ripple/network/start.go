@@ -58,6 +58,7 @@ type rise struct {
 	x        []float64
 	periods  float64
 	reached  float64 // within the period last walked
+	highest  float64 // potential of the node in that period, in the direction of its rise
 	out      Startup
 }
 
@@ -126,12 +127,16 @@ func (r *rise) stair(part float64) (*envelope, error) {
 // look walks the period at the present state and reports whether the node comes up
 // in it.
 func (r *rise) look(e *envelope) (bool, error) {
-	if err := e.here(fine); err != nil {
+	g := rough
+	if e.leap <= 2 {
+		g = fine
+	}
+	if err := e.here(g); err != nil {
 		return false, err
 	}
 	s, node := e.frame, r.options.Node
 	way := span{e.at(s.group[node]), grounded, s.offset[node], -1}
-	r.reached = e.linear.reaches(&way, r.sign, r.level)
+	r.reached, r.highest = e.linear.reaches(&way, r.sign, r.level)
 	passed := e.linear.passed()
 	e.judge(math.Max(math.Min(e.pace.passed, passed), 0.01*passed))
 	return !math.IsInf(r.reached, 1), nil
@@ -148,6 +153,7 @@ func (r *rise) climb(e *envelope, until float64) (done bool, err error) {
 	}()
 	e.periods = r.periods
 	before, at, beyond := append([]float64(nil), e.x...), e.periods, math.Inf(1)
+	below, above := 0.0, 0.0
 	for range 400 {
 		if e.periods >= until {
 			return false, nil
@@ -165,16 +171,22 @@ func (r *rise) climb(e *envelope, until float64) (done bool, err error) {
 			return true, nil
 		}
 		if up {
-			beyond = e.periods
+			beyond, above = e.periods, r.highest
 			copy(e.x, before)
 			e.periods = at
-			if err := e.here(fine); err != nil {
+			if err := e.here(rough); err != nil {
 				return false, err
 			}
+		} else {
+			below = r.highest
 		}
 		copy(before, e.x)
 		at = e.periods
-		most := math.Min(until-at, math.Max(1, math.Floor((beyond-at)/2)))
+		most := until - at
+		if !math.IsInf(beyond, 1) {
+			part := (r.level - below) / (above - below)
+			most = math.Min(most, math.Max(1, math.Floor((beyond-at)*part)-1))
+		}
 		if err := e.advance(most); err != nil {
 			return false, err
 		}

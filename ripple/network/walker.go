@@ -272,6 +272,6 @@ func (w *walker) tolerate(current float64) {
 		least = 1e-10 * w.scale
 	}
 	for i := range w.diodes {
-		w.slack[i] = math.Max(1e-4*current/w.diodes[i].on, least)
+		w.slack[i] = math.Max(1e-3*current/w.diodes[i].on, least)
 	}
 }

@@ -25,7 +25,7 @@ func (w *walker) settle(h float64) error {
 		if pass > 20 && small < 1e-6*w.scale {
 			small *= 2 // a column of capacitors drowned in rounding
 		}
-		if far <= small || !w.conduct(end) && whole {
+		if far <= small || !w.conduct(end, small) && whole {
 			w.settled(h, end)
 			return nil
 		}
@@ -118,12 +118,13 @@ func (s *system) form(m, x, y []float64) float64 {
 	return sum
 }
 
-// conduct brings the diodes' states up to date and reports whether any changed.
-func (w *walker) conduct(end float64) (changed bool) {
+// conduct brings the diodes' states up to date, but for what rounding may decide, and
+// reports whether any changed.
+func (w *walker) conduct(end, small float64) (changed bool) {
 	for i := range w.diodes {
 		d := &w.diodes[i]
-		on := d.volts(w.stage[2], w.sign, end) > d.drop
-		if on != w.on[i] {
+		over := d.volts(w.stage[2], w.sign, end) - d.drop
+		if on := over > 0; on != w.on[i] && math.Abs(over) > small {
 			w.on[i], changed = on, true
 			w.work.Events++
 		}

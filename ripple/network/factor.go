@@ -74,14 +74,26 @@ func (p *pattern) solve(x, y []trio) {
 	}
 }
 
+// drowned is the part of its own entry below which rounding has eaten up a pivot.
+const drowned = 1e-13
+
 // factoriseReal replaces a real symmetric matrix, given by its diagonal and the
-// entries below it, by its factors L D Lᵀ, the diagonal inverted.
-func (p *pattern) factoriseReal(x []float64) {
+// entries below it, by its factors L D Lᵀ, the diagonal inverted. own is the diagonal
+// by which drowned pivots are told and made good: what hangs on next to nothing.
+func (p *pattern) factoriseReal(x, own []float64) {
 	u := 0
+	copy(own, x[:p.n])
 	for k := range p.n {
 		first := int(p.start[k])
 		column := x[p.n+first : p.n+int(p.start[k+1])]
-		x[k] = 1 / x[k]
+		switch least := drowned * own[k]; {
+		case x[k] > least:
+			x[k] = 1 / x[k]
+		case least > 0:
+			x[k] = 1 / least
+		default:
+			x[k] = 0
+		}
 		for s := range column {
 			l := column[s] * x[k]
 			x[p.row[first+s]] -= l * column[s]

@@ -36,6 +36,7 @@ func (p *Periodic) index(name string) int {
 type branch struct {
 	span
 	element *circuit.Element
+	index   int // of the element
 	diode   int
 	coil    int
 	bare    bool // of a diode: without the junction's current
@@ -75,7 +76,7 @@ func (p *Periodic) branches(i int, bare bool) []branch {
 
 func (p *Periodic) branch(i int, sign float64, bare bool) branch {
 	e := &p.Circuit.Elements[i]
-	b := branch{span: p.spanOf(e), element: e, sign: sign, bare: bare}
+	b := branch{span: p.spanOf(e), element: e, index: i, sign: sign, bare: bare}
 	for k := range p.track.diodes {
 		if p.track.diodes[k].element == i {
 			b.diode = k
@@ -125,6 +126,9 @@ func (p *Periodic) flow(list []branch) (f Flow, impulse bool) {
 func (y *samples) peak(euler bool, most float64) float64 {
 	most = math.Max(most, math.Abs(y[3]))
 	if euler {
+		return most
+	}
+	if low, high := y.reach(); low >= -most && high <= most {
 		return most
 	}
 	p := through(y[0], y[1], y[2], y[3])
@@ -189,20 +193,17 @@ func (p *Periodic) branchCurrent(b *branch, step int) samples {
 // charging is the current of a capacitance: the slope of the collocation
 // polynomial. What a jump moves is counted apart.
 func (t *track) charging(step int, v *samples, c float64) samples {
-	var y samples
 	st := &t.steps[step]
 	switch {
 	case st.jump || c == 0:
-		return y
+		return samples{}
 	case st.euler:
 		i := c * (v[3] - v[0]) / st.length
 		return samples{i, i, i, i}
 	}
 	p := v.polynomial(false)
-	for j, x := range [4]float64{0, node1, node2, 1} {
-		y[j] = c * p.slope(x) / st.length
-	}
-	return y
+	c /= st.length
+	return samples{c * p[1], c * p.slope(node1), c * p.slope(node2), c * p.slope(1)}
 }
 
 // jump is the charge branches move at a jump of the square wave.

@@ -40,17 +40,35 @@ type ledger struct {
 	view     *Periodic
 	branches [][]branch
 	spans    []span
+	plain    []branch  // by element: itself, of a diode with its junction
+	parts    [][]part  // by element: of a tie, whose currents add up to its own
 	last     []float64 // current at the end of the step before
+	whole    []samples // current in the step, that of a diode with its junction's
+}
+
+// part is an element whose current is a part of another's.
+type part struct {
+	element int
+	sign    float64
 }
 
 func newLedger(s *system) *ledger {
 	n := len(s.c.Elements)
 	l := &ledger{Stresses: Stresses{s.c, make([]Stress, n)}, view: &Periodic{Circuit: s.c, track: &track{system: s}},
-		branches: make([][]branch, n), spans: make([]span, n), last: make([]float64, n)}
+		branches: make([][]branch, n), spans: make([]span, n), plain: make([]branch, n), parts: make([][]part, n), last: make([]float64, n), whole: make([]samples, n)}
 	for i := range s.c.Elements {
+		e := &s.c.Elements[i]
 		l.of[i].Least, l.of[i].Greatest = quantity.Voltage(math.Inf(1)), quantity.Voltage(math.Inf(-1))
 		l.branches[i] = l.view.branches(i, true)
-		l.spans[i] = l.view.spanOf(&s.c.Elements[i])
+		l.spans[i] = l.view.spanOf(e)
+		if !isTie(e) {
+			l.plain[i] = l.branches[i][0]
+			continue
+		}
+		for k := range l.branches[i] {
+			b := &l.branches[i][k]
+			l.parts[i] = append(l.parts[i], part{b.index, b.sign})
+		}
 	}
 	return l
 }
@@ -60,14 +78,49 @@ func (l *ledger) enter(t *track) {
 	l.view.track = t
 	for k := range t.steps {
 		for i := range l.of {
-			l.add(i, k)
+			if l.parts[i] == nil {
+				l.add(i, k)
+			}
+		}
+		for i := range l.of {
+			if l.parts[i] != nil {
+				l.gather(i, k)
+			}
 		}
 	}
 }
 
+// add enters one step of an element.
 func (l *ledger) add(i, k int) {
+	if l.plain[i].element == nil { // a tie that nothing hangs on
+		return
+	}
+	v, y := l.view.track.stages(k, &l.spans[i]), l.view.branchCurrent(&l.plain[i], k)
+	l.whole[i] = y
+	if e := l.plain[i].element; e.Kind == circuit.Diode && e.Rectifier.Junction > 0 {
+		j := l.view.track.charging(k, &v, float64(e.Rectifier.Junction))
+		for m := range j {
+			l.whole[i][m] += j[m]
+		}
+	}
+	l.book(i, k, &v, y)
+}
+
+// gather enters one step of a tie.
+func (l *ledger) gather(i, k int) {
+	var y samples
+	for _, p := range l.parts[i] {
+		for m, x := range l.whole[p.element] {
+			y[m] += p.sign * x
+		}
+	}
+	v := l.view.track.stages(k, &l.spans[i])
+	l.book(i, k, &v, y)
+}
+
+// book enters voltage and current of one step.
+func (l *ledger) book(i, k int, v *samples, y samples) {
 	st, s := &l.view.track.steps[k], &l.of[i]
-	v, y := l.view.track.stages(k, &l.spans[i]), l.view.current(l.branches[i], k)
 	s.Least, s.Greatest = v.widen(st.euler, s.Least, s.Greatest)
 	y[0], l.last[i] = l.last[i], y[3]
 	s.Peak = quantity.Current(y.peak(st.euler, float64(s.Peak)))

@@ -10,16 +10,17 @@ import "math"
 // starts the shooting method from nothing, faults included.
 type peaks struct {
 	*walker
-	pattern *pattern
-	place   []int // by unknown, then those of the negative peak
-	base    []float64
-	factor  []float64
-	pull    []float64 // right-hand side without the diodes
-	y, u, d []float64
-	soft    []float64 // by diode: on-conductance, no more than needed to tie its ends together
-	early   []int     // entries between potentials at the positive peak
-	shift   float64   // of the prepared equations
-	pressed float64
+	pattern  *pattern
+	place    []int // by unknown, then those of the negative peak
+	base     []float64
+	factor   []float64
+	diagonal []float64 // of the matrix before it was factorised
+	pull     []float64 // right-hand side without the diodes
+	y, u, d  []float64
+	soft     []float64 // by diode: on-conductance, no more than needed to tie its ends together
+	early    []int     // entries between potentials at the positive peak
+	shift    float64   // of the prepared equations
+	pressed  float64
 }
 
 func newPeaks(s *system) *peaks {
@@ -40,7 +41,7 @@ func newPeaks(s *system) *peaks {
 	}
 	p := &peaks{walker: newWalker(s)}
 	p.pattern, p.place = newPattern(g, 2*n)
-	p.base, p.factor = make([]float64, p.pattern.size()), make([]float64, p.pattern.size())
+	p.base, p.factor, p.diagonal = make([]float64, p.pattern.size()), make([]float64, p.pattern.size()), make([]float64, 2*n)
 	p.pull, p.y, p.u, p.d = make([]float64, 2*n), make([]float64, 2*n), make([]float64, 2*n), make([]float64, 2*n)
 	p.on = make([]bool, 2*len(s.diodes))
 	for i := range p.on {
@@ -251,7 +252,7 @@ func (p *peaks) prepare(shift float64) {
 			p.factor[k] *= 1 + shift
 		}
 	}
-	p.pattern.factoriseReal(p.factor)
+	p.pattern.factoriseReal(p.factor, p.diagonal)
 }
 
 // passed is the largest charge a diode passes in a period.

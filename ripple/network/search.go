@@ -61,9 +61,9 @@ func (s *search) converge(g grade) error {
 // until walks and corrects until told that it is done.
 func (s *search) until(g grade, done func() bool) error {
 	s.pace.smooth, s.stray, s.last, s.leap, s.trial, s.still, s.leaps = false, false, math.Inf(1), 1, false, 0, 0
-	walked := s.pace.work.Periods
+	walked, stepped := s.pace.work.Periods, s.pace.work.Steps
 	for range mostCorrections {
-		if s.pace.work.Periods-walked > mostWalks || s.pace.work.Steps > s.budget() {
+		if s.pace.work.Periods-walked > mostWalks || s.pace.work.Steps-stepped > s.budget() {
 			break
 		}
 		finished, err := s.once(g, done)

@@ -39,33 +39,44 @@ func Steady(c *circuit.Circuit, o Options) (*Periodic, error) {
 	return newShooter(s).solve(o.From)
 }
 
-// attempts are how hard the diodes are pressed to conduct in the guesses that a
-// search starts from, in parts of the charge that takes a ladder down by about its
-// own voltage, and how many leaps it may take from there.
-var attempts = []struct {
+// attempt is one way to begin a search.
+type attempt struct {
+	// press is how hard the diodes are pressed to conduct in the guess, in parts of the
+	// charge that takes a ladder down by about its own voltage.
 	press float64
-	leaps int
-}{{0, 2}, {0.05, 6}, {0.5, 10}, {5, 100}}
+	leaps int  // that Newton's method may take where it goes astray
+	creep bool // creep instead
+}
 
-// solve searches from one guess after the other.
+// attempts are the ways to begin a search, in the order in which they are tried.
+func attempts() []attempt {
+	return []attempt{{0, 2, false}, {0, 0, true}, {0.05, 6, false}, {0.5, 10, false}, {5, 100, false}}
+}
+
+// solve searches in one way after the other.
 func (s *shooter) solve(from *Periodic) (*Periodic, error) {
 	h := newSearch(s)
 	var err error
-	for _, a := range attempts {
+	for _, a := range attempts() {
 		s.guess(a.press / float64(1+len(s.diodes)*len(s.diodes)))
 		if from != nil {
 			s.startFrom(from)
 			from = nil
 		}
-		h.patience = a.leaps
-		if err = h.approach(rough, 1e-4); err == nil {
-			break
+		if err = h.begin(a); err == nil {
+			return h.refine()
 		}
 	}
-	if err != nil {
-		return nil, err
+	return nil, err
+}
+
+// begin leads the guess near to rest in the rough grade.
+func (s *search) begin(a attempt) error {
+	if a.creep {
+		return s.creep(rough, 1e-4)
 	}
-	return h.refine()
+	s.patience = a.leaps
+	return s.approach(rough, 1e-4)
 }
 
 // refine goes from the state in the rough grade to that in the fine one.
@@ -74,7 +85,13 @@ func (s *search) refine() (*Periodic, error) {
 	before := append([]float64(nil), s.x...)
 	s.patience = 20
 	if err := s.converge(fine); err != nil {
-		return nil, err
+		copy(s.x, before)
+		if err := s.creep(fine, 1e-7); err != nil {
+			return nil, err
+		}
+		if !s.balanced(true) {
+			return nil, lack.Failed("the periodic state was not reached in %d periods", s.pace.work.Periods)
+		}
 	}
 	p := s.periodic()
 	p.Uncertainty = quantity.Voltage(s.apart(before, s.x))

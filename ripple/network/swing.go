@@ -82,6 +82,9 @@ func (y *samples) polynomial(euler bool) cubic {
 
 // widen widens a range to what the quantity does over the step.
 func (y *samples) widen(euler bool, least, greatest quantity.Voltage) (quantity.Voltage, quantity.Voltage) {
+	if low, high := y.reach(); low >= float64(least) && high <= float64(greatest) {
+		return least, greatest
+	}
 	p := y.polynomial(euler)
 	if low, high := p.hull(); low >= float64(least) && high <= float64(greatest) {
 		return least, greatest
@@ -92,6 +95,13 @@ func (y *samples) widen(euler bool, least, greatest quantity.Voltage) (quantity.
 		low, high = min(low, v), max(high, v)
 	}
 	return min(least, quantity.Voltage(low)), max(greatest, quantity.Voltage(high))
+}
+
+// reach is what a cubic through samples surely stays within: it leaves their range by
+// less than the range itself.
+func (y *samples) reach() (low, high float64) {
+	low, high = min(y[0], y[1], y[2], y[3]), max(y[0], y[1], y[2], y[3])
+	return low - (high - low), high + (high - low)
 }
 
 // Point is a voltage at an instant of the period.

@@ -2,7 +2,6 @@ package evidence
 
 import (
 	"fmt"
-	"math"
 	"math/cmplx"
 
 	"kilovet/hv/circuit"
@@ -65,14 +64,12 @@ func (e *Evidence) driveLine(k int, kept func(node string) bool) (Line, error) {
 	return l.scaled(e.taper(k)), err
 }
 
-// taper weighs harmonic k of a square drive, whose steps a cut series would overshoot by
-// a tenth (C. Lanczos, Applied Analysis, 1956, ch. IV, from memory).
+// taper weighs harmonic k of a square drive, whose steps a cut series would overshoot.
 func (e *Evidence) taper(k int) float64 {
 	if e.chain.Drive.Waveform.V != "square" {
 		return 1
 	}
-	x := math.Pi * float64(k) / (harmonics + 1)
-	return math.Sin(x) / x
+	return phasor.Taper(k, harmonics)
 }
 
 func (l Line) scaled(w float64) Line {
@@ -196,22 +193,6 @@ func (e *Evidence) outputConductance() (float64, error) {
 	return 1 / float64(supply.OutputResistance), err
 }
 
-// peakToPeak is the swing of a sum of harmonics of one fundamental, the k-th at index k−1.
-func peakToPeak(amplitudes []complex128) quantity.Voltage {
-	const samples = 1024
-	least, most := math.Inf(1), math.Inf(-1)
-	for i := range samples {
-		turn := cmplx.Exp(complex(0, 2*math.Pi*float64(i)/samples))
-		v, w := 0.0, turn
-		for _, a := range amplitudes {
-			v += real(a * w)
-			w *= turn
-		}
-		least, most = math.Min(least, v), math.Max(most, v)
-	}
-	return quantity.Voltage(most - least)
-}
-
 func pick(lines []Line, of func(Line) complex128) []complex128 {
 	all := make([]complex128, len(lines))
 	for i, l := range lines {
@@ -224,7 +205,7 @@ func pick(lines []Line, of func(Line) complex128) []complex128 {
 // harmonics, peak to peak.
 func (e *Evidence) CathodeRipple() (quantity.Voltage, error) {
 	lines, err := e.DriveLines()
-	return peakToPeak(pick(lines, func(l Line) complex128 { return l.Cathode })), err
+	return phasor.PeakToPeak(pick(lines, func(l Line) complex128 { return l.Cathode })), err
 }
 
 // BiasRipple is the ripple across the bias, peak to peak, hum included.
@@ -233,7 +214,7 @@ func (e *Evidence) BiasRipple() (quantity.Voltage, error) {
 	if err != nil {
 		return 0, err
 	}
-	return peakToPeak(pick(lines, func(l Line) complex128 { return l.Bias })), nil
+	return phasor.PeakToPeak(pick(lines, func(l Line) complex128 { return l.Bias })), nil
 }
 
 // CathodeHum is the hum at the cathode, peak to peak: the common mode of the feed and

@@ -2,6 +2,8 @@
 package limits
 
 import (
+	"fmt"
+
 	"kilovet/hv/quantity"
 	"kilovet/rules/rule"
 )
@@ -20,27 +22,35 @@ func practice(text string) rule.Source {
 	return rule.Source{Text: text, Mark: rule.Practice, Governs: true}
 }
 
+// derated is a derating whose source says its own shares: the failing one first, the
+// marginal one second.
+func derated(marginal, fails quantity.Fraction, words string) Derating {
+	return Derating{marginal, fails, practice(fmt.Sprintf(words, quantity.Text(fails), quantity.Text(marginal)))}
+}
+
+// Allowed says how much of a rating may be used at most, in words.
+func (d Derating) Allowed() string { return quantity.Text(d.Fails) }
+
+// Comfort says from where on a use of something is marginal, in words.
+func (d Derating) Comfort(of string) string {
+	return "marginal above " + quantity.Text(d.Marginal) + " of " + of
+}
+
 // Usual shares of ratings; common practice, no source.
 var (
-	DiodeReverse      = Derating{0.70, 0.85, practice("diode reverse voltage at most 85 % of rating, 70 % for comfort")}
-	DiodeCurrent      = Derating{0.50, 0.80, practice("mean forward current at most 80 % of rating, 50 % for comfort")}
-	DiodeSurge        = Derating{0.70, 1.00, practice("peak current of a single fault at most the single-pulse rating, 70 % for comfort")}
-	CapacitorVoltage  = Derating{0.60, 0.80, practice("capacitor voltage at most 80 % of rating, 60 % for comfort")}
-	ResistorVoltage   = Derating{0.80, 0.90, practice("resistor voltage at most 90 % of rating, 80 % for comfort")}
-	ResistorPower     = Derating{0.50, 0.70, practice("resistor power at most 70 % of the rating at its ambient, 50 % for comfort; rating falls linearly from 70 to 155 degC")}
-	InsulationVoltage = Derating{0.80, 1.00, practice("working voltage at most the rating of an insulating part, 80 % for comfort")}
-	StartVoltage      = Derating{0.90, 1.00, practice("voltages of a start, a rare event, at most the rating, 90 % for comfort")}
-	SinglePulse       = Derating{0.80, 1.00, practice("a single arc at most the single-pulse rating, 80 % for comfort")}
+	DiodeReverse      = derated(0.70, 0.85, "diode reverse voltage at most %s of rating, %s for comfort")
+	DiodeCurrent      = derated(0.50, 0.80, "mean forward current at most %s of rating, %s for comfort")
+	DiodeSurge        = derated(0.70, 1.00, "peak current of a single fault at most the single-pulse rating, %[2]s for comfort")
+	CapacitorVoltage  = derated(0.60, 0.80, "capacitor voltage at most %s of rating, %s for comfort")
+	ResistorVoltage   = derated(0.80, 0.90, "resistor voltage at most %s of rating, %s for comfort")
+	ResistorPower     = derated(0.50, 0.70, "resistor power at most %s of the rating at its ambient, %s for comfort; rating falls linearly from 70 to 155 degC")
+	InsulationVoltage = derated(0.80, 1.00, "working voltage at most the rating of an insulating part, %[2]s for comfort")
+	StartVoltage      = derated(0.90, 1.00, "voltages of a start, a rare event, at most the rating, %[2]s for comfort")
+	SinglePulse       = derated(0.80, 1.00, "a single arc at most the single-pulse rating, %[2]s for comfort")
 )
 
 // ArcSource says why series resistors are judged by what an arc does to them.
 var ArcSource = practice("an arc at the gun drives the stored charge through the series resistors: they stand it as a single pulse")
-
-// Power of a film resistor falls linearly between these: common practice, no source.
-const (
-	FullPowerTo  quantity.Temperature = 70 + 273.15
-	NoPowerAbove quantity.Temperature = 155 + 273.15
-)
 
 // Shares of half a period that the recovery of a diode may take.
 const (

@@ -4,6 +4,7 @@ import (
 	"math"
 	"testing"
 
+	"kilovet/hv/steady"
 	"kilovet/rules/limits"
 	"kilovet/rules/rule"
 )
@@ -24,8 +25,8 @@ func TestLimitsAreWhatTheirSourcesSay(t *testing.T) {
 		{"where charge gives way to energy (read)", float64(limits.ChargeRuleTo), 15000},
 		{"bond, resistance (read)", float64(limits.BondResistance), 0.1},
 		{"bond, test current (read)", float64(limits.BondTestCurrent), 25},
-		{"full power of a film resistor to (practice)", float64(limits.FullPowerTo), 343.15},
-		{"no power of a film resistor above (practice)", float64(limits.NoPowerAbove), 428.15},
+		{"full power of a film resistor to (practice)", float64(steady.FullPowerTo), 343.15},
+		{"no power of a film resistor above (practice)", float64(steady.NoPowerAbove), 428.15},
 		{"feed test (practice)", limits.FeedTest, 1.2},
 		{"feed test, comfort", limits.FeedTestComfort, 1.5},
 		{"headroom", limits.HeadroomMargin, 0.05},

@@ -43,7 +43,7 @@ var (
 	DischargeSource  = rule.Source{Text: "IEC 60204-1 6.2.4: 60 V within 5 s, otherwise a label with the delay", Mark: rule.Read, Governs: true}
 	InteriorSource   = rule.Source{Text: "IEC 61010-1: interior parts 10 s, otherwise a warning with the waiting time", Mark: rule.Memory}
 	RedundancySource = practice("two independent strings, each alone meeting the time: one open element must not leave the charge")
-	RodSource        = rule.Source{Text: "grounding rules quoting NIST practice: a resistor stick first, then a solid ground left on; energy rating above the stored energy", Mark: rule.Read, Governs: true}
+	RodSource        = rule.Source{Text: "NIST EEEL, Safety Rules for Moderate and High Voltages (2008), as repeated by hanoverlabs.com: a resistor stick first, then a solid ground left on; energy rating above the stored energy (pupman.com, 2002)", Mark: rule.Read, Governs: true}
 	BondSource       = rule.Source{Text: "IEC 61010-1 6.5: protective bonding at most 0.1 ohm at 25 A", Mark: rule.Read, Governs: true}
 	TwoBondsSource   = practice("two separate earth bonds: loss of one must not lift the enclosure to high voltage")
 	InterlockSource  = rule.Source{Text: "two interlocks a door, restart by a deliberate act only (radiation control rules, quoting 21 CFR 1020.40)", Mark: rule.Read, Governs: true}

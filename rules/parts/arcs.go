@@ -14,7 +14,7 @@ var arcVoltage = rule.Rule{
 	ID: "series.arc_voltage", Title: "Series resistors in an arc: voltage",
 	Demands: "Each series resistor between stored charge and gun stands what an arc at output or cathode puts across it, as a single pulse.",
 	Applies: "Filter, gun-end and bias resistors and loose ones in the lead, regulation lost; the arc is followed in time. A clamp across the bias resistor limits it.",
-	Margin:  "marginal above 80 % of the single-pulse rating",
+	Margin:  limits.SinglePulse.Comfort("the single-pulse rating"),
 	Concern: rule.Equipment,
 	Sources: []rule.Source{limits.ArcSource, limits.SinglePulse.Source},
 	Example: rule.Example{
@@ -56,7 +56,7 @@ var arcEnergy = rule.Rule{
 	ID: "series.arc_energy", Title: "Series resistors in an arc: energy",
 	Demands: "Each series resistor between stored charge and gun takes the share of the stored energy that an arc at output or cathode turns into heat in it.",
 	Applies: "Filter and gun-end resistors, loose ones in the lead, and a bias resistor without a clamp, regulation lost. What the drive feeds in while an arc stands is shown apart.",
-	Margin:  "marginal above 80 % of the single-pulse rating",
+	Margin:  limits.SinglePulse.Comfort("the single-pulse rating"),
 	Concern: rule.Equipment,
 	Sources: []rule.Source{limits.ArcSource, limits.SinglePulse.Source},
 	Example: rule.Example{

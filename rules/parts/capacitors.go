@@ -12,9 +12,9 @@ import (
 
 var capacitorVoltage = rule.Rule{
 	ID: "capacitor.voltage", Title: "Capacitor voltage",
-	Demands: "The largest voltage on a capacitor, peaks included, stays at or below 80 % of its rating.",
+	Demands: "The largest voltage on a capacitor, peaks included, stays at or below " + limits.CapacitorVoltage.Allowed() + " of its rating.",
 	Applies: "Every capacitor that the description gives as a part.",
-	Margin:  "marginal above 60 % of the rating",
+	Margin:  limits.CapacitorVoltage.Comfort("the rating"),
 	Concern: rule.Equipment,
 	Sources: []rule.Source{limits.CapacitorVoltage.Source},
 	Example: rule.Example{

@@ -12,9 +12,9 @@ func isDiode(el circuit.Element) bool { return el.Kind == circuit.Diode }
 
 var diodeReverse = rule.Rule{
 	ID: "diode.reverse_voltage", Title: "Diode reverse voltage",
-	Demands: "The largest reverse voltage on a diode position stays at or below 85 % of the rating of its stack.",
+	Demands: "The largest reverse voltage on a diode position stays at or below " + limits.DiodeReverse.Allowed() + " of the rating of its stack.",
 	Applies: "Every diode.",
-	Margin:  "marginal above 70 % of the rating",
+	Margin:  limits.DiodeReverse.Comfort("the rating"),
 	Concern: rule.Equipment,
 	Sources: []rule.Source{limits.DiodeReverse.Source},
 	Example: rule.Example{
@@ -33,9 +33,9 @@ var diodeReverse = rule.Rule{
 
 var diodeCurrent = rule.Rule{
 	ID: "diode.mean_current", Title: "Diode mean current",
-	Demands: "The mean forward current of a diode stays at or below 80 % of its rating.",
+	Demands: "The mean forward current of a diode stays at or below " + limits.DiodeCurrent.Allowed() + " of its rating.",
 	Applies: "Every diode of the multiplier.",
-	Margin:  "marginal above 50 % of the rating",
+	Margin:  limits.DiodeCurrent.Comfort("the rating"),
 	Concern: rule.Equipment,
 	Sources: []rule.Source{limits.DiodeCurrent.Source},
 	Example: rule.Example{
@@ -58,7 +58,7 @@ var diodeSurge = rule.Rule{
 	ID: "diode.surge_current", Title: "Diode current in an arc",
 	Demands: "The peak current that an arc at the gun drives through a diode stays at or below its single-pulse rating.",
 	Applies: "Every diode of the multiplier, regulation lost.",
-	Margin:  "marginal above 70 % of the rating",
+	Margin:  limits.DiodeSurge.Comfort("the rating"),
 	Concern: rule.Equipment,
 	Sources: []rule.Source{limits.DiodeSurge.Source},
 	Example: rule.Example{

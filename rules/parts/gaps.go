@@ -14,7 +14,7 @@ var gapStrikes = rule.Rule{
 	ID: "gap.strikes", Title: "Gaps and clamps at rest",
 	Demands: "No gap, gas tube, varistor or clamp strikes while nothing has failed; every figure takes them as open.",
 	Applies: "Every spark gap, clamp and varistor, in every state.",
-	Margin:  "marginal above 80 % of its voltage",
+	Margin:  limits.InsulationVoltage.Comfort("its voltage"),
 	Concern: rule.Equipment,
 	Sources: []rule.Source{limits.InsulationVoltage.Source},
 	Example: rule.Example{

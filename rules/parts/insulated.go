@@ -13,7 +13,7 @@ var cableVoltage = rule.Rule{
 	ID: "cable.voltage", Title: "Cable voltage",
 	Demands: "The cable is rated for the highest voltage of the chain.",
 	Applies: "Where a cable is described.",
-	Margin:  "marginal above 80 % of the rating",
+	Margin:  limits.InsulationVoltage.Comfort("the rating"),
 	Concern: rule.Life,
 	Sources: []rule.Source{limits.InsulationVoltage.Source},
 	Example: rule.Example{
@@ -33,7 +33,7 @@ var feedVoltage = rule.Rule{
 	ID: "feed.voltage", Title: "Heater feed voltage",
 	Demands: "The feed that carries the heater's power is rated for the highest voltage between its sides.",
 	Applies: "Where a heater feed other than a battery is described.",
-	Margin:  "marginal above 80 % of the rating",
+	Margin:  limits.InsulationVoltage.Comfort("the rating"),
 	Concern: rule.Life,
 	Sources: []rule.Source{limits.InsulationVoltage.Source},
 	Example: rule.Example{

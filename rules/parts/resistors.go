@@ -4,6 +4,7 @@ import (
 	"kilovet/hv/circuit"
 	"kilovet/hv/lack"
 	"kilovet/hv/quantity"
+	"kilovet/hv/steady"
 	"kilovet/rules/evidence"
 	"kilovet/rules/limits"
 	"kilovet/rules/rule"
@@ -13,9 +14,9 @@ func isResistor(el circuit.Element) bool { return isA(circuit.Resistor, el) }
 
 var resistorVoltage = rule.Rule{
 	ID: "resistor.voltage", Title: "Resistor voltage",
-	Demands: "The voltage across each resistor element stays at or below 90 % of its rating.",
+	Demands: "The voltage across each resistor element stays at or below " + limits.ResistorVoltage.Allowed() + " of its rating.",
 	Applies: "Every resistor that the description gives as a part, in every state; arcs are judged apart.",
-	Margin:  "marginal above 80 % of the rating",
+	Margin:  limits.ResistorVoltage.Comfort("the rating"),
 	Concern: rule.Equipment,
 	Sources: []rule.Source{limits.ResistorVoltage.Source},
 	Example: rule.Example{
@@ -38,9 +39,9 @@ var resistorVoltage = rule.Rule{
 
 var resistorPower = rule.Rule{
 	ID: "resistor.power", Title: "Resistor power",
-	Demands: "The power in each resistor element stays at or below 70 % of its rating at the air temperature of the site.",
+	Demands: "The power in each resistor element stays at or below " + limits.ResistorPower.Allowed() + " of its rating at the air temperature of the site.",
 	Applies: "Every resistor that the description gives as a part.",
-	Margin:  "marginal above 50 % of the rating",
+	Margin:  limits.ResistorPower.Comfort("the rating"),
 	Concern: rule.Equipment,
 	Sources: []rule.Source{limits.ResistorPower.Source},
 	Example: rule.Example{
@@ -69,17 +70,11 @@ func judgePower(e *evidence.Evidence, g group) rule.Finding {
 	return r.judge(e, g, f)
 }
 
-// ambientShare is the part of a resistor's power rating left at the site's air
-// temperature: all of it to 70 °C, none above 155 °C (common practice, no source).
-func ambientShare(e *evidence.Evidence) (float64, error) {
+// ambientShare is the part of a resistor's power rating left at the site's air temperature.
+func ambientShare(e *evidence.Evidence) (quantity.Fraction, error) {
 	site := e.Chain().Site
 	if site == nil || !site.AirTemperature.Set() {
 		return 0, lack.Key("site.air_temperature")
 	}
-	t := site.AirTemperature.V
-	if quantity.AtLeast(t, limits.NoPowerAbove) {
-		return 0, lack.Range("air at %s leaves a film resistor no power", quantity.Text(t))
-	}
-	share := float64((limits.NoPowerAbove - t) / (limits.NoPowerAbove - limits.FullPowerTo))
-	return min(1, share), nil
+	return steady.PowerShare(site.AirTemperature.V)
 }

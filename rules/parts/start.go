@@ -15,7 +15,7 @@ var startCurrent = rule.Rule{
 	ID: "start.diode_current", Title: "Diode current while starting",
 	Demands: "The largest current of a diode on the way up from discharged stays at or below its single-pulse rating.",
 	Applies: "Every diode of the multiplier; full drive at once, or the ramp where drive.ramp describes one; nominal values, loads on.",
-	Margin:  "marginal above 70 % of the rating",
+	Margin:  limits.DiodeSurge.Comfort("the rating"),
 	Concern: rule.Equipment,
 	Sources: []rule.Source{limits.DiodeSurge.Source},
 	Example: rule.Example{
@@ -39,7 +39,7 @@ var startVoltage = rule.Rule{
 	ID: "start.voltage", Title: "Voltages while starting",
 	Demands: "On the way up from discharged no capacitor of the columns and no diode sees more than its rating.",
 	Applies: "Capacitors and diodes of the multiplier, until the top has 95 % of its final mean; full drive at once, or the ramp where drive.ramp describes one.",
-	Margin:  "marginal above 90 % of the rating",
+	Margin:  limits.StartVoltage.Comfort("the rating"),
 	Concern: rule.Equipment,
 	Sources: []rule.Source{limits.StartVoltage.Source},
 	Example: rule.Example{

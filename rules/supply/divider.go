@@ -11,7 +11,7 @@ import (
 	"kilovet/rules/rule"
 )
 
-var clampSource = rule.Source{Text: "a gas tube or Zener across the lower arm, since an open lower arm puts the high voltage on the meter lead (handbook text)", Mark: rule.Read, Governs: true}
+var clampSource = rule.Source{Text: "a gas tube or Zener across the lower arm, since an open lower arm puts the high voltage on the meter lead", Mark: rule.Practice, Governs: true}
 
 var dividerClamp = rule.Rule{
 	ID: "divider.clamp", Title: "Clamp of the divider's tap",
@@ -58,7 +58,7 @@ var meterRating = rule.Rule{
 	ID: "divider.meter_voltage", Title: "Meter with the lower arm open",
 	Demands: "The meter stands the voltage of the tap with the lower arm open.",
 	Applies: "Where a meter is described at the divider.",
-	Margin:  "marginal above 80 % of the rating",
+	Margin:  limits.InsulationVoltage.Comfort("the rating"),
 	Concern: rule.Equipment,
 	Sources: []rule.Source{clampSource, limits.InsulationVoltage.Source},
 	Example: rule.Example{
@@ -93,9 +93,9 @@ func judgeMeter(e *evidence.Evidence, d *chain.Divider) rule.Finding {
 
 var errorKnown = rule.Rule{
 	ID: "divider.error", Title: "Error of the divider",
-	Demands: "The divider's error can be computed and stays at or below 10 %, so that a reading can be believed.",
+	Demands: "The divider's error can be computed and stays at or below " + quantity.Text(limits.DividerError) + ", so that a reading can be believed.",
 	Applies: "Where a divider is described.",
-	Margin:  "marginal above 5 %",
+	Margin:  "marginal above " + quantity.Text(limits.DividerComfort),
 	Concern: rule.Performance,
 	Sources: []rule.Source{errorSource},
 	Example: rule.Example{
@@ -118,4 +118,4 @@ var errorKnown = rule.Rule{
 	},
 }
 
-var errorSource = rule.Source{Text: "a divider off by more than 10 % cannot prove a set voltage or a safe state", Mark: rule.Practice, Governs: true}
+var errorSource = rule.Source{Text: "a divider off by more than " + quantity.Text(limits.DividerError) + " cannot prove a set voltage or a safe state", Mark: rule.Practice, Governs: true}

@@ -11,13 +11,13 @@ import (
 	"kilovet/rules/rule"
 )
 
-var headroomSource = rule.Source{Text: "a regulated drive keeps 5 % in hand at full load", Mark: rule.Practice, Governs: true}
+var headroomSource = rule.Source{Text: "a regulated drive keeps " + quantity.Text(quantity.Fraction(limits.HeadroomMargin)) + " in hand at full load", Mark: rule.Practice, Governs: true}
 
 var headroom = rule.Rule{
 	ID: "drive.headroom", Title: "Headroom of the drive",
 	Demands: "The drive can give the peak that holds the set voltage at full load.",
 	Applies: "Where the output is regulated.",
-	Margin:  "marginal with less than 5 % in hand",
+	Margin:  "marginal with less than " + quantity.Text(quantity.Fraction(limits.HeadroomMargin)) + " in hand",
 	Concern: rule.Performance,
 	Sources: []rule.Source{headroomSource},
 	Example: rule.Example{

@@ -13,9 +13,9 @@ import (
 
 var strays = rule.Rule{
 	ID: "multiplier.strays", Title: "What strays take",
-	Demands: "Strays, junction capacitance and leakage take at most 25 % of the voltage without load.",
+	Demands: "Strays, junction capacitance and leakage take at most " + quantity.Text(limits.StrayShare) + " of the voltage without load.",
 	Applies: "Where a multiplier is described, working state. Strays that are not given are taken as none.",
-	Margin:  "marginal above 5 %",
+	Margin:  "marginal above " + quantity.Text(limits.StrayComfort),
 	Concern: rule.Performance,
 	Sources: []rule.Source{limits.StraySource},
 	Example: rule.Example{

@@ -72,6 +72,9 @@ func Of(g gap.Gap) (Material, error) {
 			m.Name = "the solid"
 		}
 	}
+	if m.Exponent.Least == 0 { // a material of which only other figures are known
+		m.Exponent = steepest
+	}
 	m.Strength = Span[quantity.Field]{Least: g.Strength, Most: g.Strength, Source: read("strength given in the description")}
 	m.Tested, m.Thinnest, m.Thickest, m.Others, m.Caveats = g.Specimen, 0, 0, nil, nil
 	return m, nil

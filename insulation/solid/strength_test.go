@@ -315,3 +315,33 @@ func TestDischargeTestIsAskedAboveBoth(t *testing.T) {
 		t.Error("the source lost its mark")
 	}
 }
+
+// A maker's figure takes the place of the printed one: at its thickness it holds, thicker
+// parts fall by the material's own exponent, by the steepest known where there is none,
+// and thinner ones gain nothing. Every source bears a mark.
+func TestStrengthAsGiven(t *testing.T) {
+	for material, exponent := range map[string]float64{"PTFE": 0.3, "alumina": 0.32, "polyurethane": 0.42, "PVC": 0.42, "a new compound": 0.42, "": 0.42} {
+		g := gap.Gap{Medium: gap.Solid, Material: material, Strength: 18e6, Specimen: 3 * mm, Clearance: 3 * mm}
+		at, err := solid.Breakdown(g)
+		if err != nil {
+			t.Fatalf("%q: %v", material, err)
+		}
+		marked(t, material, at)
+		near(t, material+" at its thickness", float64(at.Value), 54*kV, 1e-9)
+		g.Clearance = 12 * mm
+		thick, err := solid.Breakdown(g)
+		if err != nil {
+			t.Fatal(err)
+		}
+		near(t, material+" four times thicker", float64(thick.Value), 4*54*kV*math.Pow(4, -exponent), 1e-9)
+		g.Clearance = 1 * mm
+		thin, err := solid.Breakdown(g)
+		if err != nil {
+			t.Fatal(err)
+		}
+		near(t, material+" a third as thick", float64(thin.Value), 18*kV, 1e-9)
+	}
+	if _, err := solid.Breakdown(gap.Gap{Medium: gap.Solid, Material: "a new compound", Clearance: 3 * mm}); lack.Of(err) == nil {
+		t.Error("an unknown material without a strength stands something")
+	}
+}

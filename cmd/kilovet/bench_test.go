@@ -6,6 +6,7 @@ import (
 
 	"kilovet"
 	"kilovet/hv/chain"
+	"kilovet/reports/html"
 	"kilovet/reports/json"
 	"kilovet/reports/page"
 	"kilovet/reports/pdf"
@@ -29,4 +30,29 @@ func BenchmarkWholeReview(b *testing.B) {
 			b.Fatal(err)
 		}
 	}
+}
+
+// BenchmarkRendering renders sheets and page of a review that is there: what remains of
+// a review when all is computed.
+func BenchmarkRendering(b *testing.B) {
+	name, data := kilovet.Example()
+	c, faults := rules.Read(data)
+	if len(faults) > 0 {
+		b.Fatal(faults)
+	}
+	r := rules.Run(c, []rules.Input{{Role: "description", Name: filepath.Base(name)}}, rules.Program{Name: "kilovet"})
+	b.Run("sheets", func(b *testing.B) {
+		for b.Loop() {
+			if _, err := pdf.Render(page.New(r)); err != nil {
+				b.Fatal(err)
+			}
+		}
+	})
+	b.Run("page", func(b *testing.B) {
+		for b.Loop() {
+			if _, err := html.Render(r); err != nil {
+				b.Fatal(err)
+			}
+		}
+	})
 }

@@ -189,7 +189,7 @@ func (s source) sum() string {
 // refuse it, and lines no longer than can be read.
 func (w world) manner(all bool) text.Options {
 	columns := w.columns()
-	return text.Options{All: all, Colour: columns > 0 && w.env("NO_COLOR") == "", Width: min(columns, 100)}
+	return text.Options{All: all, Colour: columns > 0 && w.env("NO_COLOR") == "" && w.env("TERM") != "dumb", Width: min(columns, 100)}
 }
 
 // required reads the concerns of --require.

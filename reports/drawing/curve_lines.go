@@ -82,7 +82,7 @@ func (p *plot) numberLine(i int, l exhibit.Line) {
 		clear float64
 	}
 	var all []candidate
-	for _, q := range p.spread(l, 24, (2*i+1)*12/len(p.Lines)) {
+	for _, q := range p.spread(l, 16, (2*i+1)*8/len(p.Lines)) {
 		all = append(all, candidate{q, nearest(q, others)})
 	}
 	slices.SortStableFunc(all, func(a, b candidate) int { return cmp.Compare(b.clear, a.clear) })
@@ -109,7 +109,7 @@ func (p *plot) others(i int) []at {
 	var all []at
 	for j, l := range p.Lines {
 		if j != i {
-			all = append(all, p.spread(l, 80, 0)...)
+			all = append(all, p.spread(l, 48, 0)...)
 		}
 	}
 	return all

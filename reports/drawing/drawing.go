@@ -75,7 +75,7 @@ func (pen *Pen) Schematic(d *diagram.Diagram) *Picture {
 // smaller as little as can be to fit into a room.
 func (pen *Pen) SchematicIn(d *diagram.Diagram, width, height vg.Length) *Picture {
 	best, most := &Picture{}, 0.0
-	for row := 80.0; d != nil && row <= rowWidth; row += 15 {
+	for row := 80.0; d != nil && row <= rowWidth; row += 25 {
 		s := &sheet{faces: pen.faces, bare: true}
 		s.schematic(d, row)
 		p := s.picture()

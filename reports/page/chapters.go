@@ -35,7 +35,7 @@ func (n *writer) schematic() []Block {
 	if d == nil {
 		return nil
 	}
-	f := Figure{Anchor: schematic, Label: n.labels[schematic], Diagram: d, Wide: true, Spots: map[string]string{}, Caption: digest.SchematicCaption(d)}
+	f := Figure{Anchor: schematic, Label: n.labels[schematic], Diagram: d, Wide: true, Spots: map[string]string{}, Caption: digest.SchematicCaption(d) + flagsExplained(d)}
 	for _, m := range d.Marks {
 		for _, p := range d.Parts() {
 			if p.Mark == m.Number {
@@ -49,6 +49,13 @@ func (n *writer) schematic() []Block {
 		blocks = append(blocks, n.flags(d))
 	}
 	return blocks
+}
+
+func flagsExplained(d *diagram.Diagram) string {
+	if len(d.Marks) == 0 {
+		return ""
+	}
+	return " Flags: black fails, broken outline unassessed, plain outline marginal; their numbers are explained below."
 }
 
 func (n *writer) markAnchor(m diagram.Mark) string {

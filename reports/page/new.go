@@ -105,7 +105,7 @@ func (n *writer) entryRows(findings []rule.Finding) []Row {
 		to := n.anchorOf(e.First)
 		rows = append(rows, Row{Cells: []Cell{
 			{Verdict: e.First.Verdict},
-			lines(linked(strong(e.First.Rule), to), plain(shortened(e.Names(mostSubjects))), small("concerns "+string(e.First.Concern))),
+			lines(linked(strong(e.First.Rule), to), small(shortened(strings.TrimSuffix("concerns "+string(e.First.Concern)+": "+e.Names(mostSubjects), ": ")))),
 			lines(plain(shortened(e.First.Because))),
 			{Lines: []Line{{Sheet: to, Links: []Link{{To: to}}}}},
 		}})

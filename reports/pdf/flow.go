@@ -13,6 +13,7 @@ type flow struct {
 	sheets  []*sheet
 	y       float64
 	anchors map[string]spot
+	drawn   map[asked]framed
 }
 
 // spot is where links lead.
@@ -22,13 +23,13 @@ type spot struct {
 }
 
 func newFlow(f *fonts, a area, pen *drawing.Pen) *flow {
-	return &flow{fonts: f, area: a, pen: pen, anchors: map[string]spot{}}
+	return &flow{fonts: f, area: a, pen: pen, anchors: map[string]spot{}, drawn: map[asked]framed{}}
 }
 
 // trial is an empty flow on the same kind of sheet, to see what room things take.
 func (w *flow) trial(y float64) *flow {
 	t := newFlow(w.fonts, w.area, w.pen)
-	t.sheets, t.y = []*sheet{{}}, y
+	t.sheets, t.y, t.drawn = []*sheet{{}}, y, w.drawn
 	return t
 }
 

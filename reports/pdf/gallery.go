@@ -5,6 +5,8 @@ import (
 
 	"kilovet/reports/drawing"
 	"kilovet/reports/page"
+	"kilovet/rules/diagram"
+	"kilovet/rules/exhibit"
 )
 
 // Sizes of a gallery in millimetres.
@@ -78,8 +80,26 @@ func (w *flow) figures(all ...framed) {
 	w.y += most + 1
 }
 
-// framed draws a figure for a width; it is made smaller where a sheet would not hold it.
+// framed draws a figure for a width, once for all that ask.
 func (w *flow) framed(f page.Figure, width float64) framed {
+	wanted := asked{f.Curve, f.Diagram, width}
+	known, there := w.drawn[wanted]
+	if !there {
+		known = w.draw(f, width)
+		w.drawn[wanted] = known
+	}
+	return known
+}
+
+// asked is a picture of a width.
+type asked struct {
+	curve   *exhibit.Curve
+	diagram *diagram.Diagram
+	width   float64
+}
+
+// draw makes a picture smaller where a sheet would not hold it.
+func (w *flow) draw(f page.Figure, width float64) framed {
 	out := framed{Figure: f, caption: w.caption(f, width)}
 	room := w.bottom - w.top - captionGap - height(out.caption) - 14
 	if f.Diagram != nil {

@@ -43,7 +43,7 @@ func (w *flow) tableStart(t page.Table) float64 {
 // filled is the table cut to the rows that the sheet holds beside what follows it, at
 // least one, with a row that counts the others.
 func (w *flow) filled(t page.Table, after float64) page.Table {
-	room := w.bottom - after - w.y - 4 - headHeight
+	room := w.bottom - after - w.y - 4 - w.headTall(t.Columns)
 	rows := w.tableRows(t, func() {})
 	heights := func(upTo int) (sum float64) {
 		for _, r := range rows[:upTo] {
@@ -61,6 +61,15 @@ func (w *flow) filled(t page.Table, after float64) page.Table {
 	}
 	t.Rows = append(slices.Clone(t.Rows[:n]), t.Rest(n))
 	return t
+}
+
+// headTall is what the titles of these columns take.
+func (w *flow) headTall(columns []page.Column) float64 {
+	most := 0.0
+	for _, c := range columns {
+		most = max(most, height(w.fit(column, c.Title, c.Share*w.across-gutter, 2)))
+	}
+	return most + 2
 }
 
 // headHeight is the most that the titles of the columns take.

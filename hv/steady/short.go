@@ -48,6 +48,13 @@ func Short(c *circuit.Circuit, from Voltages, node string) (Delivered, error) {
 	return r.deliver(group)
 }
 
+// Shorts are the shorts at several nodes, one by one, on all processors.
+func Shorts(c *circuit.Circuit, from Voltages, nodes []string) ([]Delivered, []error) {
+	all, errs := make([]Delivered, len(nodes)), make([]error, len(nodes))
+	spread(len(nodes), func(i int) { all[i], errs[i] = Short(c, from, nodes[i]) })
+	return all, errs
+}
+
 // smallDiode is a diode resistance well below every other: a thousandth of the
 // smallest, at most an ohm.
 func (r *rundown) smallDiode() float64 {

@@ -31,7 +31,8 @@
 // problem for any circuit; the linear equations are solved by carrying changes
 // through the stored factors of the period (Saad and Schultz, SIAM J. Sci. Stat.
 // Comput. 7 (1986) 856). Where some diodes do not conduct yet Newton's method cannot be
-// believed: the state is led on in leaps of many periods, or the search starts anew
+// believed: the state is led on in leaps of many periods, or by implicit steps in pseudo
+// time (Kelley and Keyes, SIAM J. Numer. Anal. 35 (1998) 508), or the search starts anew
 // with the diodes pressed to conduct. The step control makes the period a continuous
 // function of its start, so that the charges come back to 1e-8 of what a diode
 // passes, at worst to 3e-7. Work is bounded; what is not reached is a lack. The network is

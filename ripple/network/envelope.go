@@ -43,7 +43,7 @@ const (
 
 // here walks the period at the present state.
 func (e *envelope) here(g grade) error {
-	e.pace.grade, e.pace.track = g, e.linear
+	e.pace.bounds, e.pace.track = g.bounds(), e.linear
 	if err := e.walk(); err != nil {
 		return err
 	}

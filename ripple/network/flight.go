@@ -31,7 +31,7 @@ func newFlight(c *circuit.Circuit, from State) (*flight, error) {
 	if err != nil {
 		return nil, err
 	}
-	f := &flight{pace: &pace{walker: newWalker(s), track: &track{system: s}, grade: fine}, ledger: newLedger(s), phase: from.phase}
+	f := &flight{pace: &pace{walker: newWalker(s), track: &track{system: s}, bounds: fine.bounds()}, ledger: newLedger(s), phase: from.phase}
 	for i := range c.Elements {
 		o := wave(&c.Elements[i], 1/s.period)
 		f.swings = f.swings || o.sine != 0 || o.square != 0

@@ -6,8 +6,18 @@ import (
 	"kilovet/hv/lack"
 )
 
-// grade is how finely a period is walked.
-type grade struct {
+// grade is how finely a period is walked. The difference between the answers of the two
+// bounds the error of the finer.
+type grade int
+
+const (
+	rough grade = iota
+	fine
+)
+
+// bounds are those of a grade; each is tighter in the finer one, the step after an event
+// included.
+type bounds struct {
 	rough   float64 // roughness a step may have, relative to the ladder's energy at the drive's peak
 	charge  float64 // charge a step may misplace in a diode, relative to that of a period
 	longest float64 // step, in periods
@@ -15,12 +25,12 @@ type grade struct {
 	growth  float64 // of the step at most
 }
 
-// Two grades: the difference between their answers bounds the error of the finer.
-// Every bound is tighter in the finer one, the step after an event included.
-var (
-	rough = grade{rough: 1e-3, charge: 0.05, longest: 1.0 / 12, first: 1.0 / 400, growth: 10}
-	fine  = grade{rough: 3e-5, charge: 0.005, longest: 1.0 / 24, first: 1.0 / 1600, growth: 6}
-)
+func (g grade) bounds() bounds {
+	if g == rough {
+		return bounds{rough: 1e-3, charge: 0.05, longest: 1.0 / 12, first: 1.0 / 400, growth: 10}
+	}
+	return bounds{rough: 3e-5, charge: 0.005, longest: 1.0 / 24, first: 1.0 / 1600, growth: 6}
+}
 
 // pace walks a period. Its control of the step makes the end of the period a
 // continuous function of the start: a step is shortened without a jump, an event
@@ -28,7 +38,7 @@ var (
 // the state come to rest.
 type pace struct {
 	*walker
-	grade
+	bounds
 	track   *track
 	next    float64
 	energy  float64 // norm the roughness is relative to

@@ -32,7 +32,7 @@ func TestInnerLoopsAllocateNothing(t *testing.T) {
 	}
 	h := newShooter(s)
 	h.guess(0)
-	h.pace.grade = fine
+	h.pace.bounds = fine.bounds()
 	if err := h.walk(); err != nil {
 		t.Fatal(err)
 	}

@@ -69,18 +69,49 @@ type Short struct {
 
 // ShortAt is what an ideal short at a node delivers, drive and loads off.
 func (e *Evidence) ShortAt(node string) (Short, error) {
-	return remember(e, "short at "+e.canonical(node), func() (Short, error) {
-		c, err := e.Circuit()
+	name := e.canonical(node)
+	if e.condition.Corner == Nominal && e.condition.Fault.Name == "" {
+		all, err := e.shorts()
 		if err != nil {
 			return Short{}, err
 		}
-		v, err := e.means()
-		if err != nil {
-			return Short{}, err
+		if s, there := all[name]; there {
+			return s.value, s.err
 		}
-		d, err := steady.Short(c, v, node)
-		return Short{d.Charge, d.Energy}, err
+	}
+	return remember(e, "short at "+name, func() (Short, error) {
+		all, err := e.shorted([]string{node})
+		return all[node].value, first(err, all[node].err)
 	})
+}
+
+// shorts are the shorts at all nodes that a description may name.
+func (e *Evidence) shorts() (map[string]outcome[Short], error) {
+	return remember(e, "shorts", func() (map[string]outcome[Short], error) {
+		var names []string
+		for _, n := range e.Nodes() {
+			names = append(names, e.canonical(n))
+		}
+		return e.shorted(names)
+	})
+}
+
+// shorted are the shorts at the given nodes.
+func (e *Evidence) shorted(nodes []string) (map[string]outcome[Short], error) {
+	c, err := e.Circuit()
+	if err != nil {
+		return nil, err
+	}
+	v, err := e.means()
+	if err != nil {
+		return nil, err
+	}
+	delivered, errs := steady.Shorts(c, v, nodes)
+	all := map[string]outcome[Short]{}
+	for i, d := range delivered {
+		all[nodes[i]] = outcome[Short]{Short{d.Charge, d.Energy}, errs[i]}
+	}
+	return all, nil
 }
 
 // canonical is the first name of a node.

@@ -103,15 +103,16 @@ func (t track) field(v, from, x float64) float64 {
 // critical one.
 func (t track) reach(v, from, length float64) (float64, error) {
 	critical := float64(t.critical)
-	if t.field(v, from, length) >= critical {
+	s := float64(t.line.Radius())
+	place := func(u float64) float64 { return s * math.Expm1(u-1) } // u from 1: Rise wants no zero
+	top := 1 + math.Log1p(length/s)
+	if t.field(v, from, place(top)) >= critical { // not at length, from which rounding parts it
 		return length, nil
 	}
 	if t.field(v, from, 0) <= critical {
 		return 0, nil
 	}
-	s := float64(t.line.Radius())
-	place := func(u float64) float64 { return s * math.Expm1(u-1) } // u from 1: Rise wants no zero
-	u, err := solve.Rise(1, 1+math.Log1p(length/s), func(u float64) (float64, error) {
+	u, err := solve.Rise(1, top, func(u float64) (float64, error) {
 		return math.Log(critical / t.field(v, from, place(u))), nil
 	})
 	return place(u), err

@@ -40,6 +40,13 @@ func cutoffFigures(c *collector, e *evidence.Evidence) {
 		add(c, "gun.cutoff_estimate_low", "", basis, estimate.Low, nil)
 		add(c, "gun.cutoff_estimate_high", "", basis, estimate.High, nil)
 	}
+	if by, err := e.CutoffByField(); err == nil {
+		add(c, "gun.cutoff_field", "", fieldBasis, by.Voltage, nil)
+		add(c, "gun.cutoff_field_low", "", fieldBasis, by.Low, nil)
+		add(c, "gun.cutoff_field_high", "", fieldBasis, by.High, nil)
+		c.number("gun.influence_control", "", fieldBasis, by.Control)
+		c.number("gun.influence_anode", "", fieldBasis, by.Anode)
+	}
 	if e.DiodeGun() {
 		return
 	}

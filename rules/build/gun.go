@@ -16,6 +16,13 @@ const (
 	Anode   = "anode"
 )
 
+// FromGun is what says that an arrangement was built from the geometry of the gun, and
+// Setback the name of that dimension.
+const (
+	FromGun = "gun.geometry"
+	Setback = "setback"
+)
+
 // GunName is the name of the arrangement of a gun.
 const GunName = "gun"
 
@@ -25,7 +32,7 @@ const farGun = 12
 // Gun is the arrangement of a gun's geometry: cathode on a rod as thick as its tip, or
 // flat; control electrode and anode with fully rounded holes.
 func Gun(g *chain.GunGeometry) *Arrangement {
-	a := &Arrangement{From: "gun.geometry"}
+	a := &Arrangement{From: FromGun}
 	if a.Err = needGun(g); a.Err != nil {
 		a.Field = pen{g.Here()}.field(GunName, "vacuum")
 		return a
@@ -60,7 +67,7 @@ type gunSizes struct {
 
 // arrangement draws the gun: back face of the control electrode at z = 0, anode above.
 func (d gunSizes) arrangement(p pen) *Arrangement {
-	a := &Arrangement{Field: p.field(GunName, "vacuum"), From: "gun.geometry", Err: d.check()}
+	a := &Arrangement{Field: p.field(GunName, "vacuum"), From: FromGun, Err: d.check()}
 	if a.Err != nil {
 		return a
 	}
@@ -139,7 +146,7 @@ func (d gunSizes) dimensions(g *chain.GunGeometry) []Dimension {
 	all := []Dimension{
 		one("aperture radius", g.ApertureRadius, func(d *gunSizes) *quantity.Length { return &d.hole }),
 		one("plate thickness", g.PlateThickness, func(d *gunSizes) *quantity.Length { return &d.plate }),
-		one("setback", g.Setback, func(d *gunSizes) *quantity.Length { return &d.setback }),
+		one(Setback, g.Setback, func(d *gunSizes) *quantity.Length { return &d.setback }),
 		one("anode distance", g.AnodeDistance, func(d *gunSizes) *quantity.Length { return &d.anode }),
 	}
 	if !d.flat {

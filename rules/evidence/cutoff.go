@@ -8,7 +8,7 @@ import (
 )
 
 // Cutoff is the bias at which emission stops at full working voltage: as stated, else
-// the estimate from the gun's geometry.
+// the estimate from the gun's geometry, by the table or, past its ends, by the field.
 func (e *Evidence) Cutoff() (quantity.Voltage, error) {
 	g := e.chain.Gun
 	if g == nil {
@@ -18,6 +18,11 @@ func (e *Evidence) Cutoff() (quantity.Voltage, error) {
 		return g.Cutoff.Need()
 	}
 	estimate, err := e.CutoffEstimate()
+	if l := lack.Of(err); l != nil && l.Kind == lack.Outside {
+		if c, err := e.CutoffByField(); err == nil {
+			return c.Voltage, nil
+		}
+	}
 	return estimate.Voltage, err
 }
 

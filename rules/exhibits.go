@@ -25,6 +25,8 @@ func curves(e *evidence.Evidence) []exhibit.Curve {
 func tables(e *evidence.Evidence) []exhibit.Table {
 	return gather(e,
 		fieldTables,
+		answerTables,
+		cutoffTable,
 		closedForm,
 		dropByCause,
 		stageVoltages,

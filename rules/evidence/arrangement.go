@@ -16,7 +16,7 @@ func (e *Evidence) Arrangements() []*build.Arrangement {
 
 func arrangements(c *chain.Chain) (all []*build.Arrangement) {
 	for i := range c.Fields {
-		all = append(all, &build.Arrangement{Field: c.Fields[i]})
+		all = append(all, build.Described(&c.Fields[i]))
 	}
 	for i := range c.Feedthroughs {
 		all = append(all, build.Feedthrough(&c.Feedthroughs[i])...)

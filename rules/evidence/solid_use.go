@@ -26,7 +26,20 @@ func (e *Evidence) SolidUse(f *build.Arrangement, d *chain.Dielectric) (SolidUse
 	if u.Stress, err = e.Stress(f, u.Where); err != nil {
 		return u, err
 	}
-	line, err := u.Field.Within(u.Peak)
+	used, err := useOf(u.Stress, d)
+	used.Where = u.Where
+	return used, err
+}
+
+// allowed is the part of the strength that may be used.
+func (u SolidUse) allowed() quantity.Field {
+	return u.Stands.Value * quantity.Field(solid.Published.Of)
+}
+
+// useOf is the strength beside a field in an insulator.
+func useOf(p Stress, d *chain.Dielectric) (u SolidUse, err error) {
+	u.Stress = p
+	line, err := p.Field.Within(p.Peak)
 	if err != nil {
 		return u, err
 	}

@@ -24,6 +24,8 @@ type Stress struct {
 	Field   *field.Field
 	Under   Condition
 	Settled bool
+
+	potentials map[string]quantity.Voltage
 }
 
 // Text says under what it stands, in words.
@@ -162,7 +164,7 @@ func (e *Evidence) stress(f *build.Arrangement, w Where, counts func(fieldCase) 
 			return Stress{}, err
 		}
 		if most.Field == nil || p.Strength > most.Strength {
-			most = Stress{p, c.Field, c.Under, c.Settled}
+			most = Stress{p, c.Field, c.Under, c.Settled, c.potentials}
 		}
 	}
 	return most, nil

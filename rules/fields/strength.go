@@ -2,6 +2,7 @@ package fields
 
 import (
 	"fmt"
+	"strings"
 
 	"kilovet/hv/lack"
 	"kilovet/hv/quantity"
@@ -82,6 +83,9 @@ func judgePlace(e *evidence.Evidence, f *build.Arrangement, w evidence.Where, bo
 	switch g := e.Filling(f, body); g.Medium {
 	case "vacuum":
 		finding.Sources = []rule.Source{emissionSource, comfortSource}
+		if p.Strength > vacuum.EmissionField {
+			finding.Remedy = answered(e, f, w, finding.Remedy)
+		}
 		return finding.Most(rule.Of(p.Strength), rule.Of(vacuum.EmissionField), float64(vacuum.EmissionField/vacuum.ComfortableField)-1).WithoutRemedyIfMet()
 	case "air", "gas":
 		return judgeInGas(e, f, w, p, finding)
@@ -116,6 +120,7 @@ func judgeInGas(e *evidence.Evidence, f *build.Arrangement, w evidence.Where, p 
 	if finding.Verdict != rule.Fails {
 		return finding.WithoutRemedyIfMet()
 	}
+	finding.Remedy = answered(e, f, w, finding.Remedy)
 	if c.Traced.Closed || w.Beside != "" {
 		finding.Because += "; the sparks end on an insulator and eat it"
 		return finding
@@ -123,4 +128,27 @@ func judgeInGas(e *evidence.Evidence, f *build.Arrangement, w evidence.Where, p 
 	finding.Because += "; corona, which does not cross the gap by itself"
 	finding.Verdict = rule.Marginal
 	return finding
+}
+
+// answered is a remedy with the smallest change of each dimension that meets the rule,
+// at the weakest point of an arrangement.
+func answered(e *evidence.Evidence, f *build.Arrangement, w evidence.Where, remedy string) string {
+	weak, err := e.Weakest(f)
+	if err != nil || weak.Where.Electrode != w.Electrode || weak.Where.Body != w.Body || weak.Where.Beside != w.Beside {
+		return remedy
+	}
+	answers, err := e.Answers(f)
+	if err != nil {
+		return remedy
+	}
+	var enough []string
+	for _, a := range answers {
+		if text := a.Text(); text != "" {
+			enough = append(enough, text)
+		}
+	}
+	if len(enough) == 0 {
+		return remedy
+	}
+	return remedy + "; one of these is enough: " + strings.Join(enough, ", or ")
 }

@@ -1,0 +1,181 @@
+package evidence
+
+import (
+	"fmt"
+	"math"
+
+	"kilovet/hv/lack"
+	"kilovet/hv/quantity"
+	"kilovet/insulation"
+	"kilovet/insulation/gap"
+	"kilovet/insulation/vacuum"
+	"kilovet/rules/build"
+)
+
+// Answer is what a dimension of an arrangement does to a greatest field.
+type Answer struct {
+	build.Dimension
+	Power  float64         // the field goes with the dimension to this power, about
+	Needed quantity.Length // the dimension at which the rule is just met
+	Err    error           // why there is none; also where the rule is met already
+}
+
+// Bounds of a search for a dimension: solutions, and how far from the present value.
+const (
+	mostTries    = 4
+	farthest     = 4.0
+	littleStep   = 1.04
+	leastPower   = 0.03
+	justMet      = 0.97 // of what is allowed, from which a dimension serves
+	nothingAsked = "the rule is met"
+)
+
+// Answers are those of all dimensions of an arrangement for its weakest point, at the
+// voltages under which it is weakest. At most five solutions a dimension.
+func (e *Evidence) Answers(f *build.Arrangement) ([]Answer, error) {
+	return remember(e.Under(Condition{}), "answers "+f.Name.V, func() ([]Answer, error) {
+		weak, err := e.Weakest(f)
+		if err != nil {
+			return nil, err
+		}
+		if weak.Field == nil || !(weak.Strength > 0) {
+			return nil, lack.Failed("no weakest point is known")
+		}
+		asked, err := e.demanded(f, weak.Stress, weak.Where)
+		if err != nil {
+			return nil, err
+		}
+		var all []Answer
+		for _, d := range f.Dimensions {
+			if d.Value > 0 {
+				all = append(all, e.answer(f, d, weak, asked))
+			}
+		}
+		return all, nil
+	})
+}
+
+// tried is an arrangement with another dimension.
+type tried struct {
+	strength quantity.Field
+	demand   float64 // of what is allowed
+}
+
+func (e *Evidence) answer(f *build.Arrangement, d build.Dimension, weak Weak, asked float64) Answer {
+	a := Answer{Dimension: d}
+	v := d.Value * littleStep
+	t, err := e.try(d, v, weak)
+	if err != nil {
+		v = d.Value / littleStep
+		if t, err = e.try(d, v, weak); err != nil {
+			a.Err = err
+			return a
+		}
+	}
+	way := math.Log(float64(v / d.Value))
+	a.Power = math.Log(float64(t.strength/weak.Strength)) / way
+	power := math.Log(t.demand/asked) / way
+	switch {
+	case asked <= 1:
+		a.Err = lack.Failed(nothingAsked)
+	case math.Abs(power) < leastPower:
+		a.Err = lack.Failed("it changes too little")
+	default:
+		a.Needed, a.Err = e.search(d, weak, asked, power)
+	}
+	return a
+}
+
+// search goes by the power law and corrects it by what the solutions give.
+func (e *Evidence) search(d build.Dimension, weak Weak, asked, power float64) (quantity.Length, error) {
+	last, demand := float64(d.Value), asked
+	for range mostTries {
+		aim := math.Sqrt(justMet) // between what serves and what is allowed
+		next := last * math.Pow(aim/demand, 1/power)
+		if !(next < farthest*float64(d.Value) && next > float64(d.Value)/farthest) {
+			return 0, lack.Range("not even a fourth or four times as much is enough")
+		}
+		t, err := e.try(d, quantity.Length(next), weak)
+		if err != nil {
+			return 0, err
+		}
+		if t.demand <= 1 && t.demand >= justMet*justMet {
+			return quantity.Length(next), nil
+		}
+		if p := math.Log(t.demand/demand) / math.Log(next/last); math.Abs(p) > leastPower && p*power > 0 {
+			power = p
+		}
+		last, demand = next, t.demand
+	}
+	return 0, lack.Failed("not found within %d solutions", mostTries)
+}
+
+// try solves an arrangement with another dimension under the same voltages.
+func (e *Evidence) try(d build.Dimension, v quantity.Length, weak Weak) (tried, error) {
+	f := d.With(v)
+	s, err := solve(f)
+	if err == nil && weak.Settled {
+		s, err = s.Settled()
+	}
+	if err != nil {
+		return tried{}, err
+	}
+	at, err := s.Under(weak.potentials)
+	if err != nil {
+		return tried{}, err
+	}
+	p, err := weak.Where.find(at)
+	if err != nil {
+		return tried{}, err
+	}
+	stress := Stress{Peak: p, Field: at, Under: weak.Under, Settled: weak.Settled, potentials: weak.potentials}
+	demand, err := e.demanded(f, stress, weak.Where)
+	return tried{p.Strength, demand}, err
+}
+
+// demanded is a field over what its rule allows there.
+func (e *Evidence) demanded(f *build.Arrangement, p Stress, w Where) (float64, error) {
+	if !Open(f, p.Body) {
+		return e.demandedSolid(f, p)
+	}
+	g := e.Filling(f, p.Body)
+	if g.Medium == gap.Vacuum {
+		return float64(p.Strength / vacuum.EmissionField), nil
+	}
+	limit, _, err := insulation.Ionising(g)
+	if err != nil || p.Strength <= limit {
+		return float64(p.Strength / limit), err
+	}
+	traced, err := p.Field.Within(p.Peak)
+	if err != nil {
+		return 0, err
+	}
+	l, err := lineOf(traced)
+	if err != nil {
+		return 0, err
+	}
+	_, polarity := across(traced, w, f)
+	onset, err := insulation.StrengthAlong(g, l, polarity).FieldLimit.Get()
+	return float64(p.Strength / onset), err
+}
+
+func (e *Evidence) demandedSolid(f *build.Arrangement, p Stress) (float64, error) {
+	for i := range f.Dielectrics {
+		if d := &f.Dielectrics[i]; d.Name.V == p.Body {
+			u, err := useOf(p, d)
+			if err != nil {
+				return 0, err
+			}
+			return float64(p.Strength / u.allowed()), nil
+		}
+	}
+	return 0, lack.Failed("there is no %s", p.Body)
+}
+
+// Text says what to do, empty where nothing helps.
+func (a Answer) Text() string {
+	if a.Err != nil {
+		return ""
+	}
+	return fmt.Sprintf("%s of %s in place of %s", a.Name, quantity.Text(a.Needed), quantity.Text(a.Value))
+}

@@ -111,6 +111,7 @@ type Spacing struct {
 	Creepage      document.Given[quantity.Length]      `key:"creepage" range:"> 0 mm, <= 100 m" means:"shortest distance along the surface" example:"150 mm"`
 	Material      document.Given[string]               `key:"material" means:"what the surface or solid is made of" example:"alumina"`
 	CTI           document.Given[quantity.Voltage]     `key:"cti" range:">= 0 V, <= 1000 V" means:"comparative tracking index, in place of a material" example:"200 V"`
+	Field         document.Given[string]               `key:"field" means:"name of the [[field]] whose computed field judges in place of a shape" example:"gun feedthrough"`
 	Shape         *Shape                               `key:"shape" means:"shape of the electrodes; the gap is the clearance"`
 	Gas           document.Given[string]               `key:"gas" words:"air | nitrogen | sulphur hexafluoride | helium | argon | hydrogen | carbon dioxide" means:"gas, where the medium is gas" example:"nitrogen"`
 	Pressure      document.Given[quantity.Pressure]    `key:"pressure" range:"> 0 Pa, <= 10 MPa" means:"absolute pressure" example:"1013 mbar"`

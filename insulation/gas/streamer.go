@@ -52,14 +52,14 @@ type track struct {
 	Ionisation
 	line    shape.Line
 	density float64
-	peak    float64 // field at the stressed electrode for one volt
+	peak    float64 // greatest field on the line for one volt
 	end     float64 // of the line
 	trough  float64
 	other   float64 // how far the growth at the other electrode counts, 0 to 1
 }
 
 func (i Ionisation) along(l shape.Line, density quantity.Fraction) track {
-	t := track{Ionisation: i, line: l, density: float64(density), peak: float64(l.PerVolt(0)), end: float64(l.Gap()), trough: float64(l.Trough())}
+	t := track{Ionisation: i, line: l, density: float64(density), peak: math.Max(float64(l.PerVolt(0)), float64(l.PerVolt(l.Gap()))), end: float64(l.Gap()), trough: float64(l.Trough())}
 	t.critical *= quantity.Field(density)
 	t.most *= quantity.Field(density)
 	if t.trough < t.end {

@@ -150,13 +150,13 @@ func (e *Evidence) demanded(f *build.Arrangement, p Stress, w Where) (float64, e
 	if err != nil {
 		return 0, err
 	}
-	l, err := lineOf(traced)
+	l, reversed, err := lineOf(traced)
 	if err != nil {
 		return 0, err
 	}
-	_, polarity := across(traced, w, f)
-	onset, err := insulation.StrengthAlong(g, l, polarity).FieldLimit.Get()
-	return float64(p.Strength / onset), err
+	volts, polarity := across(traced, w, f)
+	onset, err := insulation.StrengthAlong(g, l, sharpEnd(polarity, reversed)).Onset.Get()
+	return float64(volts / onset), err
 }
 
 func (e *Evidence) demandedSolid(f *build.Arrangement, p Stress) (float64, error) {

@@ -3,6 +3,7 @@ package evidence
 import (
 	"fmt"
 	"math"
+	"slices"
 
 	"kilovet/hv/lack"
 	"kilovet/hv/quantity"
@@ -41,30 +42,62 @@ func (e *Evidence) Critical(f *build.Arrangement, w Where) (Critical, error) {
 		if c.Traced, err = s.Field.Within(s.Peak); err != nil {
 			return c, err
 		}
-		if c.Line, err = lineOf(c.Traced); err != nil {
+		reversed := false
+		if c.Line, reversed, err = lineOf(c.Traced); err != nil {
 			return c, err
 		}
 		c.Volts, c.Polarity = across(c.Traced, w, f)
 		g := e.Filling(f, s.Body)
-		c.Strength = insulation.StrengthAlong(g, c.Line, c.Polarity)
-		c.Positive = insulation.StrengthAlong(g, c.Line, gap.Positive).Breakdown
-		c.Negative = insulation.StrengthAlong(g, c.Line, gap.Negative).Breakdown
+		c.Strength = insulation.StrengthAlong(g, c.Line, sharpEnd(c.Polarity, reversed))
+		c.Positive = insulation.StrengthAlong(g, c.Line, sharpEnd(gap.Positive, reversed)).Breakdown
+		c.Negative = insulation.StrengthAlong(g, c.Line, sharpEnd(gap.Negative, reversed)).Breakdown
 		c.Streamer, err = insulation.StreamerAlong(g, c.Line, c.Volts)
 		c.HasIntegral = err == nil
 		return c, nil
 	})
 }
 
-// lineOf is a traced line as a critical one.
-func lineOf(l field.Line) (shape.Line, error) {
+// Limit is the field at the place at which a discharge starts along its line.
+func (c Critical) Limit() (gap.Answer[quantity.Field], error) {
+	onset, err := c.Strength.Onset.Get()
+	if err != nil {
+		return gap.Answer[quantity.Field]{}, err
+	}
+	by := c.Strength.Onset
+	return gap.Answer[quantity.Field]{Value: c.Peak.Strength * quantity.Field(onset/c.Volts), Because: by.Because, Sources: by.Sources, Assumptions: by.Assumptions}, nil
+}
+
+// sharpEnd is the polarity of the more highly stressed end of a line.
+func sharpEnd(start gap.Polarity, reversed bool) gap.Polarity {
+	switch {
+	case !reversed || start == gap.Unknown:
+		return start
+	case start == gap.Positive:
+		return gap.Negative
+	}
+	return gap.Positive
+}
+
+// lineOf is a traced line as a critical one, from its more highly stressed end on; it
+// reports whether that is the far one.
+func lineOf(l field.Line) (line shape.Line, reversed bool, err error) {
+	if l.Ends == "" {
+		return shape.Line{}, false, lack.Failed("the field line from there leaves the model")
+	}
+	last := l.Points[len(l.Points)-1]
+	reversed = last.Strength > l.Points[0].Strength
 	samples := make([]shape.Sample, len(l.Points))
 	for i, p := range l.Points {
 		samples[i] = shape.Sample{Along: p.Along, Field: p.Strength}
+		if reversed {
+			samples[i].Along = last.Along - p.Along
+		}
 	}
-	if l.Ends == "" {
-		return shape.Line{}, lack.Failed("the field line from there leaves the model")
+	if reversed {
+		slices.Reverse(samples)
 	}
-	return shape.Sampled(samples)
+	line, err = shape.Sampled(samples)
+	return line, reversed, err
 }
 
 // across is the voltage between the ends of a line, and the polarity of its start where

@@ -56,7 +56,9 @@ func (e *Evidence) Spacing(s *chain.Spacing) (Spacing, error) {
 			return Spacing{}, err
 		}
 		g := e.gap(s)
-		return Spacing{v, under, lasting, g, insulation.Assess(g, v)}, nil
+		x := Spacing{v, under, lasting, g, insulation.Assess(g, v)}
+		e.byField(s, &x)
+		return x, nil
 	})
 }
 

@@ -110,9 +110,9 @@ func judgeInGas(e *evidence.Evidence, f *build.Arrangement, w evidence.Where, p 
 	if err != nil {
 		return finding.Lacking(err)
 	}
-	onset := c.Strength.FieldLimit
-	if onset.Lack != nil {
-		return finding.Lacking(onset.Lack)
+	onset, err := c.Limit()
+	if err != nil {
+		return finding.Lacking(err)
 	}
 	finding.Sources = append(rule.Cited(onset.Sources), coronaSource)
 	finding.Because += fmt.Sprintf("; the streamer integral along %s of field line is %.3g times what a discharge takes", quantity.Text(c.Line.Gap()), float64(c.Streamer))

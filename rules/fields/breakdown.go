@@ -28,6 +28,7 @@ var breakdown = rule.Rule{
 			{Rule: "field.strength", Subject: "gun lead-through/pin", Verdict: rule.Marginal},
 			{Rule: "field.strength", Subject: "gun lead-through/plate", Verdict: rule.Marginal},
 			{Rule: "field.breakdown", Subject: "gun lead-through/pin", Verdict: rule.Fails},
+			{Rule: "field.breakdown", Subject: "gun lead-through/plate", Verdict: rule.Fails},
 		},
 	},
 	Judge: func(e *evidence.Evidence) rule.Judgement {

@@ -15,20 +15,15 @@ type HoldOptions struct {
 	Node  string
 	Set   quantity.Voltage // magnitude of the node's mean, with the polarity of the multiplier
 	First quantity.Voltage // a peak to begin with
-	// Within is how near, relative, the mean must come; zero is 1e-8.
-	Within quantity.Fraction
 	Options
 }
 
-// Hold finds the peak of the drive at which the mean of a node is a set voltage, and
-// the state there, by the secant method: the mean is all but proportional
+// Hold finds the peak of the drive at which the mean of a node is a set voltage, within a
+// part in 1e8, and the state there, by the secant method: the mean is all but proportional
 // to the peak. It is a lack where the load pulls the node to nothing, where there is no
 // such node, and where no peak is found in a dozen trials.
 func Hold(o HoldOptions) (quantity.Voltage, *Periodic, error) {
 	const tries = 12
-	if o.Within == 0 {
-		o.Within = 1e-8
-	}
 	a := o.First
 	va, near, err := o.try(a)
 	if err != nil {
@@ -60,7 +55,7 @@ func Hold(o HoldOptions) (quantity.Voltage, *Periodic, error) {
 
 // holds reports whether a mean is near enough.
 func (o *HoldOptions) holds(v quantity.Voltage) bool {
-	return quantity.AtMost(math.Abs(float64(v/o.Set-1)), float64(o.Within))
+	return quantity.AtMost(math.Abs(float64(v/o.Set-1)), 1e-8)
 }
 
 // try is the mean of the node at a peak, and the state it was read from.

@@ -5,6 +5,7 @@ import (
 	"strings"
 
 	"kilovet/hv/circuit"
+	"kilovet/hv/lack"
 	"kilovet/hv/quantity"
 )
 
@@ -12,10 +13,12 @@ import (
 // sign of each part's sensitivity included.
 //
 // The corner by sign is sought for the largest of the others alone, in its state: each
-// described part with a tolerance is taken to its high end by itself, which says whether
-// it raises or lowers the value, and all are then taken together to the end that raises
-// it. That is a solution a part and one more, shared among all values of the state; not
-// every combination. All capacitors of one column are one part.
+// described part with a tolerance is taken to its high end by itself, at the drive of the
+// nominal chain, which says whether it raises or lowers the value, and all are then taken
+// together to the end that raises it. Where regulation holds a node, what counts is the
+// value against the voltage of that node. That is a solution a part, shared among all
+// values of the state, and one for the corner; not every combination. All capacitors of
+// one column are one part.
 func Worst[Q ~float64](e *Evidence, names []string, value func(*Evidence, string) (Q, error)) (Extreme[Q], error) {
 	most, err := Largest(e, Ratings(), names, value)
 	if err != nil {
@@ -46,20 +49,23 @@ const indifferent = 1e-4
 // cornerBySign takes each part to the end that raises a value.
 func cornerBySign[Q ~float64](e *Evidence, most Extreme[Q], value func(*Evidence, string) (Q, error)) (Corner, error) {
 	at := most.Under
-	at.Corner = alone("")
-	base, err := value(e.Under(at), most.Name)
+	at.Corner = Nominal
+	base, held, err := against(e.Under(at), most.Name, value)
 	if err != nil {
+		return Nominal, err
+	}
+	if at.Peak, err = e.Under(at).Peak(); err != nil {
 		return Nominal, err
 	}
 	var high, low []string
 	for _, part := range e.toleranced() {
 		at.Corner = alone(part)
-		v, err := value(e.Under(at), most.Name)
+		v, now, err := against(e.Under(at), most.Name, value)
 		if err != nil {
 			return Nominal, err
 		}
-		switch change := float64(v - base); {
-		case math.Abs(change) <= indifferent*math.Abs(float64(base)):
+		switch change := v*rescaled(float64(held/now), most.Value) - base; {
+		case math.Abs(change) <= indifferent*math.Abs(base):
 		case change > 0:
 			high = append(high, part)
 		default:
@@ -70,6 +76,30 @@ func cornerBySign[Q ~float64](e *Evidence, most Extreme[Q], value func(*Evidence
 		return Nominal, nil // the corner it is from
 	}
 	return together(high, low), nil
+}
+
+// rescaled is how a value goes with the drive when all goes in proportion: powers and
+// energies as its square.
+func rescaled[Q ~float64](drive float64, of Q) float64 {
+	switch any(of).(type) {
+	case quantity.Power, quantity.Energy:
+		return drive * drive
+	}
+	return drive
+}
+
+// against is a value with the magnitude of the voltage it counts against: that of the node
+// which regulation holds, or one.
+func against[Q ~float64](e *Evidence, name string, value func(*Evidence, string) (Q, error)) (v float64, held quantity.Voltage, err error) {
+	q, err := value(e, name)
+	if err != nil || e.chain.Regulation == nil || e.condition.State == Lost {
+		return float64(q), 1, err
+	}
+	u, err := e.Potential(e.chain.Divider.Senses.Or("output"))
+	if err == nil && u == 0 {
+		err = lack.Failed("the node that regulation holds is at ground")
+	}
+	return float64(q), magnitude(u), err
 }
 
 // toleranced names the described parts whose value has a tolerance, in the order of the

@@ -31,20 +31,8 @@ const (
 	isLow     = "\x1f"
 )
 
-// alone takes one part to the high end; none where the name is empty.
+// alone takes one part to the high end.
 func alone(part string) Corner { return Corner(onePart + isHigh + part) }
-
-// one reports whether the corner is that of a single part.
-func (c Corner) one() bool { return strings.HasPrefix(string(c), onePart) }
-
-// within is how near a drive must hold the set voltage: where only the sign of a change
-// is asked, not as near.
-func (c Corner) within() quantity.Fraction {
-	if c.one() {
-		return indifferent / 10
-	}
-	return 0
-}
 
 // together takes parts to either end; it is nominal where there are none.
 func together(high, low []string) Corner {

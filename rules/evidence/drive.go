@@ -103,7 +103,7 @@ func (e *Evidence) held() (quantity.Voltage, error) {
 func (e *Evidence) peakFor(set quantity.Voltage) (trial, error) {
 	peak, at, err := network.Hold(network.HoldOptions{
 		Node: e.chain.Divider.Senses.Or("output"), Set: set, First: e.firstPeak(),
-		Options: network.Options{Frequency: e.chain.Drive.Frequency.V, From: e.alike()}, Within: e.condition.Corner.within(),
+		Options: network.Options{Frequency: e.chain.Drive.Frequency.V, From: e.alike()},
 		Build: func(peak quantity.Voltage) (*circuit.Circuit, error) {
 			c, err := e.circuitAt(peak)
 			if err != nil {
@@ -115,20 +115,12 @@ func (e *Evidence) peakFor(set quantity.Voltage) (trial, error) {
 	return trial{peak, at}, err
 }
 
-// near is the condition whose drive is near that of this one: with one part at its end
-// that with none, else the nominal one.
-func (e *Evidence) near() Condition {
-	near := e.condition
-	if near.Corner = Nominal; e.condition.Corner.one() && e.condition.Corner != alone("") {
-		near.Corner = alone("")
-	}
-	return near
-}
-
 // firstPeak is a drive to begin the search with: one that is near, or the full one.
 func (e *Evidence) firstPeak() quantity.Voltage {
 	if e.condition.Corner != Nominal {
-		if t, err := e.Under(e.near()).trial(); err == nil {
+		nominal := e.condition
+		nominal.Corner = Nominal
+		if t, err := e.Under(nominal).trial(); err == nil {
 			return t.peak
 		}
 	}

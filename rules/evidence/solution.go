@@ -44,11 +44,7 @@ func (e *Evidence) alike() *network.Periodic {
 	if e.condition.Corner == Nominal && e.condition.Fault.Name == "" {
 		return nil
 	}
-	near := Condition{State: e.condition.State}
-	if e.condition.Fault.Name == "" {
-		near.Corner = e.near().Corner
-	}
-	s, err := e.Under(near).solution()
+	s, err := e.Under(Condition{State: e.condition.State}).solution()
 	if err != nil {
 		return nil
 	}

@@ -37,6 +37,7 @@ func tables(e *evidence.Evidence) []exhibit.Table {
 		answering,
 		pathsTable,
 		spotTable,
+		remedies,
 		leftOut,
 		distances,
 		events,

@@ -71,7 +71,7 @@ func output(c *collector, e *evidence.Evidence) {
 		const phasors = "ripple.phasor"
 		of(c, "cathode.ripple", "", phasors, e.CathodeRipple)
 		of(c, "cathode.hum", "", phasors, e.CathodeHum)
-		of(c, "cathode.disturbance", "", phasors, e.CathodeDisturbance)
+		of(c, "cathode.disturbance", "", disturbanceBasis(e), e.CathodeDisturbance)
 	}
 	if e.Chain().Bias != nil {
 		v, err := e.Potential("cathode")
@@ -83,6 +83,13 @@ func output(c *collector, e *evidence.Evidence) {
 	if e.Chain().Regulation != nil && c.state != evidence.Lost {
 		of(c, "drive.peak_needed", "", basis, e.PeakNeeded)
 	}
+}
+
+func disturbanceBasis(e *evidence.Evidence) string {
+	if m, err := e.Measured(); m != nil && err == nil {
+		return "as measured"
+	}
+	return "ripple.phasor"
 }
 
 func first(errs ...error) error {

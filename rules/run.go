@@ -5,6 +5,7 @@ import (
 
 	"kilovet/hv/chain"
 	"kilovet/hv/document"
+	"kilovet/hv/trace"
 	"kilovet/rules/diagram"
 	"kilovet/rules/evidence"
 	"kilovet/rules/fields"
@@ -31,14 +32,21 @@ func All() []rule.Rule {
 // Run reviews a chain: computes its figures, judges it by every rule, and gives the
 // result as plain data. It neither reads files nor asks for the time.
 func Run(c *chain.Chain, inputs []Input, program Program) *Review {
-	r, _ := RunUnder(c, inputs, program, nil)
+	r, _ := RunUnder(c, inputs, program, Beside{})
 	return r
 }
 
-// RunUnder is Run under local limits, none where they are nil. The faults are those of
+// Beside is what was read beside a description; what is nil was not.
+type Beside struct {
+	Limits *local.File
+	// Ripple is the record that beam.measured_ripple names.
+	Ripple *trace.Trace
+}
+
+// RunUnder is Run with what was read beside the description. The faults are those of
 // the file of local limits that only show against this chain; there is no review then.
-func RunUnder(c *chain.Chain, inputs []Input, program Program, limits *local.File) (*Review, document.Faults) {
-	e := evidence.New(c)
+func RunUnder(c *chain.Chain, inputs []Input, program Program, beside Beside) (*Review, document.Faults) {
+	e := evidence.New(c).Recorded(beside.Ripple)
 	r := &Review{Program: program, Inputs: inputs, Heading: heading(c), Deference: deference}
 	for _, rl := range All() {
 		j := rl.Judge(e)
@@ -47,7 +55,7 @@ func RunUnder(c *chain.Chain, inputs []Input, program Program, limits *local.Fil
 			r.PassedOver = append(r.PassedOver, rule.PassedOver{Rule: rl.ID, Because: j.PassedOver})
 		}
 	}
-	if faults := r.under(limits); len(faults) > 0 {
+	if faults := r.under(beside.Limits); len(faults) > 0 {
 		return nil, faults
 	}
 	r.Figures = figures(e)

@@ -58,6 +58,9 @@ func outputLine(e *evidence.Evidence) string {
 }
 
 func rippleLine(e *evidence.Evidence) string {
+	if m, err := e.Measured(); m != nil && err == nil {
+		return fmt.Sprintf("%s measured at the cathode, peak to peak", quantity.Text(m.PeakToPeak()))
+	}
 	ripple, err := e.CathodeRipple()
 	if err != nil {
 		return "not known: " + err.Error()

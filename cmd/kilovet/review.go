@@ -158,11 +158,24 @@ func (r *reviewing) review(given source) (*rules.Review, error) {
 // reviewOf runs the rules on a description that was read without faults.
 func (r *reviewing) reviewOf(c *chain.Chain, given source) (*rules.Review, error) {
 	inputs, program := []rules.Input{inputOf("description", given)}, rules.Program{Name: "kilovet", Version: version()}
-	limits, err := r.limits()
-	if err != nil || limits == nil {
-		return rules.Run(c, inputs, program), err
+	var beside rules.Beside
+	ripple, trace, err := r.ripple(c, given)
+	if err != nil {
+		return nil, err
 	}
-	review, faults := rules.RunUnder(c, append(inputs, limits.input), program, limits.file)
+	if ripple != nil {
+		beside.Ripple, inputs = trace, append(inputs, ripple.input())
+	}
+	limits, err := r.limits()
+	if err != nil {
+		return nil, err
+	}
+	if limits == nil {
+		review, _ := rules.RunUnder(c, inputs, program, beside)
+		return review, nil
+	}
+	beside.Limits = limits.file
+	review, faults := rules.RunUnder(c, append(inputs, limits.input), program, beside)
 	if len(faults) > 0 {
 		return nil, r.faulty(limits.name, faults)
 	}

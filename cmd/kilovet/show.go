@@ -1,6 +1,7 @@
 package main
 
 import (
+	"bytes"
 	"context"
 	"crypto/sha256"
 	"encoding/hex"
@@ -11,11 +12,13 @@ import (
 	"os"
 	"os/signal"
 	"path/filepath"
+	"slices"
 	"syscall"
 	"time"
 
 	"github.com/spf13/cobra"
 
+	"kilovet/hv/chain"
 	"kilovet/hv/document"
 	"kilovet/reports/html"
 	"kilovet/rules"
@@ -126,7 +129,7 @@ func (f *follower) look() error {
 	} else {
 		f.missed = 0
 	}
-	sum := sha256.Sum256(append(given.data, given.note...))
+	sum := sha256.Sum256(slices.Concat(given.data, []byte(given.note), f.beside(given)))
 	version := hex.EncodeToString(sum[:8])
 	if version == f.last {
 		return nil
@@ -146,7 +149,10 @@ func (s *showing) page(given source, version string) ([]byte, error) {
 	if given.note != "" {
 		return html.Faults(name, nil, document.Faults{{Line: 1, Column: 1, What: given.note}}, o)
 	}
-	_, faults := rules.Read(given.data)
+	c, faults := rules.Read(given.data)
+	if len(faults) == 0 {
+		faults = recordFaults(c, given)
+	}
 	if len(faults) > 0 {
 		return html.Faults(name, given.data, faults, o)
 	}
@@ -156,4 +162,40 @@ func (s *showing) page(given source, version string) ([]byte, error) {
 	}
 	o.Diagram = review.Diagram
 	return html.RenderWith(review, o)
+}
+
+// beside is what was read beside a description, so that a change of it is seen.
+func (s *showing) beside(given source) []byte {
+	if !bytes.Contains(given.data, []byte("measured_ripple")) {
+		return nil
+	}
+	c, faults := rules.Read(given.data)
+	if len(faults) > 0 {
+		return nil
+	}
+	r, err := rippleRecord(c, given)
+	switch {
+	case err != nil:
+		return []byte(err.Error())
+	case r == nil:
+		return nil
+	}
+	return r.data
+}
+
+// recordFaults are the faults of the record that a description names, at the key that
+// names it.
+func recordFaults(c *chain.Chain, given source) document.Faults {
+	r, err := rippleRecord(c, given)
+	if err != nil {
+		at := c.Beam.MeasuredRipple.Place
+		return document.Faults{{Key: at.Key, Line: at.Line, Column: at.Column, What: err.Error(), Remedy: "name a file beside the description"}}
+	}
+	if r == nil {
+		return nil
+	}
+	if _, fault := r.read(c); fault != nil {
+		return document.Faults{*fault}
+	}
+	return nil
 }

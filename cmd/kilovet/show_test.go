@@ -4,6 +4,7 @@ import (
 	"bufio"
 	"bytes"
 	"context"
+	"fmt"
 	"io"
 	"net"
 	"net/http"
@@ -12,6 +13,8 @@ import (
 	"strings"
 	"testing"
 	"time"
+
+	"kilovet"
 )
 
 // shown is a description that is being shown.
@@ -154,5 +157,35 @@ func TestShowServesThisComputerAlone(t *testing.T) {
 				t.Errorf("%s %s: %s: %q", c.method, c.path, name, answer.Header.Get(name))
 			}
 		}
+	}
+}
+
+// A record beside the description is followed too; a damaged one is shown as a fault.
+func TestShowFollowsTheMeasuredRipple(t *testing.T) {
+	name, column := kilovet.Example()
+	text := strings.Replace(string(column), "exposure             =", "measured_ripple      = \"scope.csv\"\nexposure             =", 1)
+	if text == string(column) {
+		t.Fatalf("%s has no exposure", name)
+	}
+	s := start(t, text)
+	record := filepath.Join(filepath.Dir(s.path), "scope.csv")
+	if page := s.page(t); !strings.Contains(page, "scope.csv cannot be read") {
+		t.Errorf("a missing record is not shown: %.300s", page)
+	}
+	var rows strings.Builder
+	for i := range 64 {
+		fmt.Fprintf(&rows, "%d,%d\n", i, i%2)
+	}
+	write(t, record, rows.String())
+	s.ticks <- time.Time{}
+	s.ticks <- time.Time{}
+	if page := s.page(t); !strings.Contains(page, "measured ripple") {
+		t.Errorf("the record is not followed: %.300s", page)
+	}
+	write(t, record, "0,1\n1,x\n")
+	s.ticks <- time.Time{}
+	s.ticks <- time.Time{}
+	if page := s.page(t); !strings.Contains(page, "line 2") {
+		t.Errorf("the damage is not shown: %.300s", page)
 	}
 }

@@ -18,6 +18,8 @@ var checks = []Check{
 	{"regulation", "a regulated chain has a divider", checkRegulation},
 	{"load", "a load has a current or a resistance", checkLoads},
 	{"bias", "a bias is made by what it is said to be made by", checkBias},
+	{"adjustment", "a bias is adjusted within ends of its own kind", checkAdjustment},
+	{"beam", "the beam is of a particle whose keys are given, from a node of the chain", checkBeam},
 	{"heater", "the frequency of an AC heater is known", checkHeater},
 	{"name", "names tell things apart", checkNames},
 	{"node", "every named node exists", checkNodes},

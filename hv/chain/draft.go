@@ -26,7 +26,8 @@ var draftOn = []string{"format", "title", "site", "drive", "multiplier", "load",
 
 // draftOther are the keys that contradict others of the draft: the other choice.
 var draftOther = []string{
-	"drive.unbalance", "load.resistance", "bias.voltage", "spacing.voltage", "field.electrodes.voltage",
+	"drive.unbalance", "load.resistance", "bias.voltage", "bias.lowest", "bias.highest", "beam.mass_number", "beam.charge_number", "heater.ripple", "heater.ripple_frequency",
+	"spacing.voltage", "field.electrodes.voltage",
 	"spacing.shape.radius", "spacing.shape.tip_radius", "spacing.shape.edge_radius", "spacing.shape.earthed",
 	"vacuum.gauge_factor", "spacing.board", "spacing.finish", "spacing.conditioned", "spacing.stressed_area", "spacing.junction_angle", "spacing.shielded",
 	"spacing.strength", "spacing.tested_thickness", "spacing.oil_test",

@@ -65,6 +65,24 @@ name = "gap"
 medium = "air"
 voltage = "20 kV"
 `,
+	"beams of the wrong kind": whole + `
+[bias]
+kind = "self"
+resistor.value = "2 Mohm"
+lowest = "100 V"           # FAULT 10 adjustment: bias.lowest: self-bias is adjusted by its resistor; give lowest_resistance and highest_resistance
+lowest_resistance = "5 Mohm"
+highest_resistance = "2 Mohm" # FAULT 22 adjustment: bias.highest_resistance: the upper end is not above the lower one of 5 MΩ
+[beam]
+mass_number = 40           # FAULT 15 beam: beam.mass_number: only an ion has such a key
+charge_number = 2          # FAULT 17 beam: beam.charge_number: only an ion has such a key
+from = "cathod"            # FAULT 8 beam: beam.from: "cathod" is no node of this chain
+[beam.measurement]         # FAULT 1 beam: beam.measurement: how a record is to be read, and no record; give measured_ripple
+probe_factor = 10
+`,
+	"ions from a gun": whole + `
+[beam]
+particle = "ion"           # FAULT 12 beam: beam.particle: ions without a mass; give mass_number # FAULT 12 beam: beam.particle: ions from an electron gun; leave [gun] out
+`,
 	"another format": `format = 2  # FAULT 10 range: format: 2 is out of range; accepted: 1
 [[spacing]]
 name = "gap"

@@ -24,6 +24,13 @@ func (p Point) Swing(bias quantity.Voltage) (quantity.Fraction, error) {
 	return quantity.Fraction(float64(p.Transconductance()) * float64(bias) / float64(p.Emission)), nil
 }
 
+// SwingOfVoltage is by how much the emission moves, relatively, when the high voltage moves
+// by so much at a frequency: as at fixed bias, divided by what the loop takes away there.
+func (p Point) SwingOfVoltage(voltage quantity.Fraction, f quantity.Frequency, bypass quantity.Capacitance) (quantity.Fraction, error) {
+	s, err := p.AtFixedBias().Sensitivities()
+	return voltage * quantity.Fraction(s.Voltage/p.Suppression(f, bypass)), err
+}
+
 // SwingOfLimit is by how much the emission moves, relatively, when what the cathode
 // can give moves by so much at a frequency: as far as the limit governs, divided by
 // what the loop takes away there (see Suppression).

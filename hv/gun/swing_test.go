@@ -46,6 +46,17 @@ func TestSwingsAreSlopes(t *testing.T) {
 	const d = 1e-4
 	more, _ := law.SelfBias(2e6 * (1 + d))
 	near(t, "of the resistor", float64(p.DriftOfBias(d)), float64(more.Bias-p.Bias), 1e-3)
+	up, _ := law.AtVoltage(1 + d)
+	faster, _ := up.SelfBias(2e6)
+	of, err := p.SwingOfVoltage(d, 1e-6, 1e-9)
+	if err != nil {
+		t.Fatal(err)
+	}
+	near(t, "of the voltage, slowly", float64(of), float64(faster.Emission/p.Emission-1), 1e-3)
+	of, _ = p.SwingOfVoltage(d, 1e9, 1e-9)
+	high, _ := law.AtVoltage(1 + d/2)
+	low, _ := law.AtVoltage(1 - d/2)
+	near(t, "of the voltage, past the loop", float64(of), math.Log(float64(high.At(p.Bias)/low.At(p.Bias))), 1e-3)
 	raised, _ := free.Limited(120e-6 * (1 + d))
 	higher, _ := raised.SelfBias(2e6)
 	slow := p.SwingOfLimit(d, 1e-6, 1e-9)

@@ -112,10 +112,15 @@ func (d Disturbance) OfCharge(charges float64) Disturbance {
 	return d
 }
 
+// unheard is the part of the lines' rms below which noise is left out: it would widen
+// nothing by more than 1e-8.
+const unheard = 1e-4
+
 // WithNoise adds random noise of an rms voltage, whose values are Gaussian; it has no peak
-// to peak and leaves that alone.
+// to peak and leaves that alone. Noise below a ten-thousandth of the lines' rms changes
+// nothing.
 func (d Disturbance) WithNoise(rms quantity.Voltage) (Disturbance, error) {
-	if rms == 0 {
+	if rms <= unheard*d.RMS {
 		return d, nil
 	}
 	unit, err := GaussianFWHM(1)

@@ -40,3 +40,40 @@ func (s *step) harmonic(p cubic, omega float64) complex128 {
 	}
 	return sum * complex(s.length/float64(parts), 0)
 }
+
+// Harmonics are the first so many complex amplitudes, each as Harmonic gives it, for less
+// work: the turn of each node of the quadrature is taken once and multiplied on.
+func (p *Periodic) Harmonics(from, to circuit.Node, orders int) ([]complex128, error) {
+	s, err := p.span(from, to)
+	if err != nil {
+		return nil, err
+	}
+	sums := make([]complex128, orders)
+	for i := range p.track.steps {
+		y := p.track.stages(i, &s)
+		p.track.steps[i].harmonics(y.polynomial(p.track.steps[i].euler), p.track.omega, sums)
+	}
+	for k := range sums {
+		sums[k] *= complex(2/p.track.period, 0)
+	}
+	return sums, nil
+}
+
+// harmonics adds to sums the integrals of a polynomial times e^{−jkωt} over a step, k from
+// one on.
+func (s *step) harmonics(p cubic, omega float64, sums []complex128) {
+	parts := 1 + int(float64(len(sums))*omega*s.length)
+	part := s.length / float64(parts)
+	for m := range parts {
+		for i, x := range gaussNode {
+			x = (float64(m) + x) / float64(parts)
+			sin, cos := math.Sincos(omega * (s.start + x*s.length))
+			turn := complex(cos, -sin)
+			term := complex(gaussPart[i]*p.at(x)*part, 0)
+			for k := range sums {
+				term *= turn
+				sums[k] += term
+			}
+		}
+	}
+}

@@ -39,6 +39,23 @@ type EstimatedCutoff struct {
 	Voltage, Low, High quantity.Voltage
 }
 
+// Outside is by which factor a cutoff lies outside the band; below one where it lies in it.
+func (c EstimatedCutoff) Outside(v quantity.Voltage) float64 {
+	return max(float64(v/c.High), float64(c.Low/v))
+}
+
+// GunAssumptions are what the operating point takes for granted.
+func (e *Evidence) GunAssumptions() []string {
+	var all []string
+	if e.CutoffByGeometry() {
+		all = append(all, "the cutoff is the estimate from the gun's geometry")
+	}
+	if g := e.chain.Gun; g.IsFitted() && !e.DiodeGun() && !g.Exponent.Set() {
+		all = append(all, "emission ~ (cutoff − bias)^2")
+	}
+	return all
+}
+
 // CutoffEstimate is the cutoff from the tabulated geometries at the working voltage,
 // with the band of the table and of the setback's tolerance.
 func (e *Evidence) CutoffEstimate() (EstimatedCutoff, error) {

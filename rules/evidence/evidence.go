@@ -16,6 +16,7 @@ type Evidence struct {
 	condition Condition
 	memory    *memory
 	trace     *trace.Trace // of the measured ripple; nil where none was read
+	near      *Evidence    // of the chain before it was changed, to start from; nil for the described one
 }
 
 // New starts the evidence for a chain in working state, with an empty memory.
@@ -28,6 +29,25 @@ func (e *Evidence) Under(c Condition) *Evidence {
 	with := *e
 	with.condition = c
 	return &with
+}
+
+// Change is another value for a part of the chain.
+type Change struct {
+	Name string // tells it from every other change
+	Edit func(*chain.Chain)
+}
+
+// Changed is the evidence for the chain with a change, worked out from the state of the
+// chain as it is. It has a memory of its own.
+func (e *Evidence) Changed(c Change) *Evidence {
+	changed, _ := remember(e, "changed: "+c.Name, func() (*Evidence, error) {
+		copied := *e.chain
+		c.Edit(&copied)
+		with := New(&copied)
+		with.condition, with.trace, with.near = e.condition, e.trace, e
+		return with, nil
+	})
+	return changed
 }
 
 // In is the evidence in another state, otherwise under the same condition.

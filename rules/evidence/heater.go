@@ -26,12 +26,7 @@ func (e *Evidence) TipSwing() (quantity.Voltage, error) {
 	if err := document.Need(h.Supply, h.Voltage); err != nil {
 		return 0, err
 	}
-	return e.tipOf(h.Voltage.V * math.Sqrt2)
-}
-
-// tipOf is how far a voltage across the filament moves its tip against the cathode node.
-func (e *Evidence) tipOf(v quantity.Voltage) (quantity.Voltage, error) {
-	r := e.chain.Heater.CentreResistors
+	v, r := h.Voltage.V*math.Sqrt2, h.CentreResistors
 	if r == nil {
 		return gun.TipSwingReturn(v), nil
 	}
@@ -41,25 +36,34 @@ func (e *Evidence) tipOf(v quantity.Voltage) (quantity.Voltage, error) {
 // TipSwingAtWorst is TipSwing with the centre resistors at the ends of their tolerance.
 func (e *Evidence) TipSwingAtWorst() (quantity.Voltage, error) {
 	swing, err := e.TipSwing()
-	if err != nil || swing == 0 && !e.alternatingHeater() || e.chain.Heater.CentreResistors == nil {
+	if err != nil || !e.alternatingHeater() {
 		return swing, err
 	}
+	return e.worstTip(e.chain.Heater.Voltage.V * math.Sqrt2)
+}
+
+// worstTip is how far a voltage across the filament moves its tip at the ends of the centre
+// resistors' tolerance.
+func (e *Evidence) worstTip(v quantity.Voltage) (quantity.Voltage, error) {
 	r := e.chain.Heater.CentreResistors
+	if r == nil {
+		return gun.TipSwingReturn(v), nil
+	}
 	tolerance, err := r.Tolerance.Need()
 	if err != nil {
 		return 0, err
 	}
-	return gun.TipSwingTolerance(e.chain.Heater.Voltage.V*math.Sqrt2, r.Value.V[0], r.Value.V[1], tolerance)
+	return gun.TipSwingTolerance(v, r.Value.V[0], r.Value.V[1], tolerance)
 }
 
-// TipRipple is the amplitude by which the ripple of a DC heater swings the tip, and its
-// frequency; none where no ripple is stated.
+// TipRipple is the amplitude by which the ripple of a DC heater swings the tip at worst, and
+// its frequency; none where no ripple is stated.
 func (e *Evidence) TipRipple() (quantity.Voltage, quantity.Frequency, error) {
 	h := e.chain.Heater
 	if h == nil || h.Supply.V != "dc" || h.Ripple.V == 0 {
 		return 0, 0, nil
 	}
-	swing, err := e.tipOf(h.Ripple.V / 2)
+	swing, err := e.worstTip(h.Ripple.V / 2)
 	if err != nil {
 		return 0, 0, err
 	}

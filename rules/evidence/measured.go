@@ -37,10 +37,10 @@ func (m *Measured) Sampled() int { return len(m.trace.Times) }
 // mostSamples is how many samples of a record are followed to the blur.
 const mostSamples = 1 << 13
 
-// Measured is the measured ripple; nil where none is described.
+// Measured is the measured ripple, that of the working state; nil where none is described.
 func (e *Evidence) Measured() (*Measured, error) {
 	b := e.chain.Beam
-	if b == nil || !b.MeasuredRipple.Set() {
+	if b == nil || !b.MeasuredRipple.Set() || e.condition.State != Working {
 		return nil, nil
 	}
 	if e.trace == nil {
@@ -55,4 +55,19 @@ func (e *Evidence) Measured() (*Measured, error) {
 		}
 		return &Measured{beam.Record{Samples: samples, Interval: interval}, e.trace}, nil
 	})
+}
+
+// DisturbanceAssumptions are what the disturbance of the beam takes for granted: of a
+// computed one what the ripple rests on, of a measured one that nothing is slower than the
+// record.
+func (e *Evidence) DisturbanceAssumptions() []string {
+	m, err := e.Measured()
+	if m == nil || err != nil {
+		return e.RippleAssumptions()
+	}
+	lasts := m.Record.Duration()
+	if quantity.AtLeast(float64(lasts), float64(e.averaging())) {
+		return nil
+	}
+	return []string{"nothing disturbs the beam that is slower than the measured record of " + quantity.Text(lasts)}
 }

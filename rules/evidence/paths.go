@@ -4,6 +4,7 @@ import (
 	"fmt"
 	"math/cmplx"
 
+	"kilovet/hv/gun"
 	"kilovet/hv/lack"
 	"kilovet/hv/quantity"
 )
@@ -32,24 +33,40 @@ func (e *Evidence) Paths() []Path {
 			all = append(all, part()...)
 		}
 		for i := range all {
-			all[i].Emission = max(all[i].Emission, e.emissionSwing(all[i].Bias))
+			all[i].Emission = max(all[i].Emission, e.emissionSwing(all[i]))
 		}
 		return all, nil
 	})
 	return all
 }
 
-// emissionSwing is what a voltage across the bias makes of the emission; none where the
-// law is not known.
-func (e *Evidence) emissionSwing(bias quantity.Voltage) quantity.Fraction {
-	if bias == 0 || e.DiodeGun() {
-		return 0
-	}
+// emissionSwing is what a path makes of the emission, by the bias and by the high voltage
+// that the cutoff goes with, which are taken to add; none where the law is not known.
+func (e *Evidence) emissionSwing(of Path) quantity.Fraction {
 	p, err := e.Gun()
+	if err != nil || of.Noise {
+		return e.noiseSwing(p, of, err)
+	}
+	sum := quantity.Fraction(0)
+	if swing, err := p.Swing(of.Bias); err == nil && !e.DiodeGun() {
+		sum += swing
+	}
+	particle, err := e.Particle()
 	if err != nil {
+		return sum
+	}
+	if swing, err := p.SwingOfVoltage(particle.Relative(of.Voltage), of.Frequency, e.bypass()); err == nil {
+		sum += swing
+	}
+	return sum
+}
+
+// noiseSwing is the part of the bias alone: what noise moves is the cathode's own.
+func (e *Evidence) noiseSwing(p gun.Point, of Path, known error) quantity.Fraction {
+	if known != nil || e.DiodeGun() {
 		return 0
 	}
-	swing, err := p.Swing(bias)
+	swing, err := p.Swing(of.Bias)
 	if err != nil {
 		return 0
 	}
@@ -133,11 +150,11 @@ func (e *Evidence) heaterPaths() []Path {
 		}
 		return []Path{{Name: "heater/ripple", What: "ripple of the heater's DC at the tip", Frequency: f, Voltage: 2 * v, Bias: 2 * v, Unknown: err}}
 	}
-	tip := Path{Name: "heater/tip", What: "AC heater: swing of the tip by mismatch of its centre resistors"}
+	tip := Path{Name: "heater/tip", What: "AC heater: swing of the tip, centre resistors at the ends of their tolerance"}
 	if h.CentreResistors == nil {
 		tip.What = "AC heater: swing of the tip, one leg being the return"
 	}
-	v, err := e.TipSwing()
+	v, err := e.TipSwingAtWorst()
 	if err == nil {
 		tip.Frequency, err = e.heaterFrequency()
 	}

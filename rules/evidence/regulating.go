@@ -51,6 +51,24 @@ func (e *Evidence) bypass() quantity.Capacitance {
 	return c.Element("bias.bypass").Capacitance
 }
 
+// ResistorSetting is what the bias resistor must be set to, and how that is known: what the
+// stated law asks for, else what is fitted.
+func (e *Evidence) ResistorSetting() (quantity.Resistance, string, error) {
+	if r, err := e.ResistorNeeded(); err == nil {
+		return r, "the stated emission needs", nil
+	}
+	return e.chain.Bias.Resistor.Total(), "fitted are", nil
+}
+
+// BiasSetting is what a fixed bias must be set to, and how that is known: what the stated
+// law asks for, else what is set.
+func (e *Evidence) BiasSetting() (quantity.Voltage, string, error) {
+	if v, err := e.BiasNeeded(); err == nil {
+		return v, "the stated emission needs", nil
+	}
+	return e.chain.Bias.Voltage.V, "set are", nil
+}
+
 // ResistorNeeded is the bias resistor with which the stated law gives the wanted
 // emission: the stated one.
 func (e *Evidence) ResistorNeeded() (quantity.Resistance, error) {

@@ -85,11 +85,11 @@ func (e *Evidence) driven(s periodic, k int) (phasor.Excitation, error) {
 	}
 	x := phasor.Excitation{Extra: e.gunSlope()}
 	for _, node := range e.tops(c) {
-		v, err := s.harmonic(node, "ground", k)
+		all, err := remember(e, "harmonics of "+node, func() ([]complex128, error) { return s.harmonics(node, "ground", harmonics) })
 		if err != nil {
 			return x, err
 		}
-		x.Nodes = append(x.Nodes, phasor.Driven{Node: node, Voltage: phasor.Phasor(v)})
+		x.Nodes = append(x.Nodes, phasor.Driven{Node: node, Voltage: phasor.Phasor(all[k-1])})
 	}
 	return x, nil
 }
@@ -258,7 +258,9 @@ func (e *Evidence) RippleAssumptions() []string {
 	if h := c.Heater; h != nil && h.Feed != nil && h.Feed.Screen.V && h.Feed.CommonMode.V > 0 {
 		all = append(all, "the screen of the heater feed divides the coupled common mode by "+fmt.Sprint(circuit.ScreenFactor))
 	}
-	if c.Gun.IsFitted() && c.Gun.Emission.Set() && !c.Gun.Cutoff.Set() {
+	if e.CutoffByGeometry() {
+		all = append(all, "the cutoff is the estimate from the gun's geometry")
+	} else if c.Gun.IsFitted() && c.Gun.Emission.Set() && !c.Gun.Cutoff.Set() && !e.DiodeGun() {
 		all = append(all, "the gun draws a constant current: its cutoff is not given")
 	}
 	return all

@@ -41,6 +41,12 @@ func (e *Evidence) holds() bool {
 // alike is the state of the nominal chain, whole and at full drive, to start from; nil
 // where this is the one, or where it has none.
 func (e *Evidence) alike() *network.Periodic {
+	if e.near != nil {
+		if s, err := e.near.Under(e.condition).solution(); err == nil {
+			return s.Periodic
+		}
+		return nil
+	}
 	if e.condition.Corner == Nominal && e.condition.Fault.Name == "" {
 		return nil
 	}

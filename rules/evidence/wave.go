@@ -26,3 +26,16 @@ func (e *Evidence) Losses() ([]network.Loss, error) {
 	}
 	return s.Periodic.Losses(), nil
 }
+
+// harmonics are the first so many of a voltage.
+func (p periodic) harmonics(node, reference string, orders int) ([]complex128, error) {
+	a, err := p.node(node)
+	if err != nil {
+		return nil, err
+	}
+	b, err := p.node(reference)
+	if err != nil {
+		return nil, err
+	}
+	return p.Harmonics(a, b, orders)
+}

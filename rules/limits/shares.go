@@ -37,6 +37,20 @@ const (
 	// EmissionComfort is the share of the cathode's limit above which its temperature
 	// governs the emission.
 	EmissionComfort = 0.8
+	// CutoffApart is the factor by which a stated cutoff may lie outside the band of its
+	// estimate; within the band it meets.
+	CutoffApart = 2
+	// AdjustmentMargin is what the setting of a bias keeps in hand to the ends of its range.
+	AdjustmentMargin = 0.10
+	// Suppression is the least by which self-bias divides a slow disturbance of the emission
+	// where it is said to regulate, SuppressionMargin what it keeps in hand in comfort.
+	Suppression       = 2
+	SuppressionMargin = 0.5
+	// BalanceMargin is what the swing of a heater's tip keeps in hand to all that the blur
+	// allowance leaves.
+	BalanceMargin = 1
+	// FeedMargin is what a heater feed keeps in hand of its rated power.
+	FeedMargin = 0.25
 )
 
 // Limits about X-rays.

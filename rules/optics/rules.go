@@ -23,7 +23,7 @@ var blur = rule.Rule{
 	Sources: []rule.Source{blurSource},
 	Example: rule.Example{
 		Swaps:   []rule.Swap{{Was: `blur_allowance       = "12 nm"`, Becomes: `blur_allowance       = "4 nm"`}},
-		Changes: []rule.Change{{Rule: "beam.blur", Subject: "beam", Verdict: rule.Fails}},
+		Changes: []rule.Change{{Rule: "beam.blur", Subject: "beam", Verdict: rule.Fails}, {Rule: "beam.disturbance", Subject: "cathode"}},
 	},
 	Judge: func(e *evidence.Evidence) rule.Judgement {
 		b := e.Chain().Beam
@@ -33,15 +33,18 @@ var blur = rule.Rule{
 		if g := e.Chain().Gun; g != nil && !g.IsFitted() {
 			return rule.Over("the gun is not fitted")
 		}
+		if err := e.Spotless(); err != nil {
+			return rule.Over(err.Error())
+		}
 		f := rule.Finding{Rule: "beam.blur", Subject: "beam", Concern: rule.Performance, Relation: rule.AtMost, Place: b.BlurAllowance.Place,
 			Under: string(evidence.Working), Sources: []rule.Source{blurSource}, Remedy: "see beam.ripple_allowed: more filtering, or less source width, angle or aberration"}
 		total, err := e.BlurTotal()
 		if err != nil {
 			return rule.One(f.Lacking(err))
 		}
-		f.Because = fmt.Sprintf("the spot is %s of the %s allowed (FW50)", quantity.Text(total), quantity.Text(b.BlurAllowance.V))
+		f.Because = fmt.Sprintf("the spot is %s of the %s allowed (FW50)%s", quantity.Text(total), quantity.Text(b.BlurAllowance.V), measuredRipple(e))
 		f = f.Most(rule.Of(total), rule.Of(b.BlurAllowance.V), limits.BlurMargin)
-		return rule.One(f.Assume(e.RippleAssumptions()...).WithoutRemedyIfMet())
+		return rule.One(f.Assume(e.DisturbanceAssumptions()...).WithoutRemedyIfMet())
 	},
 }
 
@@ -56,7 +59,7 @@ var emissionLaw = rule.Rule{
 	Sources: []rule.Source{lawSource},
 	Example: rule.Example{
 		Swaps:   []rule.Swap{{Was: `emission            = "60 uA"`, Becomes: `emission            = "40 uA"`}},
-		Changes: []rule.Change{{Rule: "gun.emission_law", Subject: "gun", Verdict: rule.Fails}},
+		Changes: []rule.Change{{Rule: "gun.emission_law", Subject: "gun", Verdict: rule.Fails}, {Rule: "gun.regulation", Subject: "gun", Verdict: rule.Marginal}},
 	},
 	Judge: func(e *evidence.Evidence) rule.Judgement {
 		g := e.Chain().Gun
@@ -86,7 +89,7 @@ var emissionLimit = rule.Rule{
 	Sources: []rule.Source{limitSource},
 	Example: rule.Example{
 		Swaps:   []rule.Swap{{Was: `emitting_area       = "0.03 mm2"`, Becomes: `emitting_area       = "0.003 mm2"`}},
-		Changes: []rule.Change{{Rule: "gun.emission_limit", Subject: "gun", Verdict: rule.Fails}},
+		Changes: []rule.Change{{Rule: "gun.emission_limit", Subject: "gun", Verdict: rule.Fails}, {Rule: "gun.emission_law", Subject: "gun", Verdict: rule.Marginal}, {Rule: "gun.regulation", Subject: "gun", Verdict: rule.Unassessed}},
 	},
 	Judge: func(e *evidence.Evidence) rule.Judgement {
 		g := e.Chain().Gun
@@ -108,5 +111,15 @@ var emissionLimit = rule.Rule{
 	},
 }
 
+// measuredRipple says that the ripple is not a computed one.
+func measuredRipple(e *evidence.Evidence) string {
+	if !e.Chain().Beam.MeasuredRipple.Set() {
+		return ""
+	}
+	return ", with the measured ripple in place of the computed one"
+}
+
 // Rules lists the rules of this family.
-func Rules() []rule.Rule { return []rule.Rule{blur, emissionLaw, emissionLimit} }
+func Rules() []rule.Rule {
+	return []rule.Rule{blur, emissionLaw, emissionLimit, cutoff, adjustment, regulating, heaterBalance, feedPower, disturbance, hum, drift}
+}

@@ -1,0 +1,155 @@
+package evidence
+
+import (
+	"fmt"
+	"math"
+
+	"kilovet/hv/chain"
+	"kilovet/hv/lack"
+	"kilovet/hv/quantity"
+)
+
+// Remedy is another value for one part, with which the disturbance just uses up the blur
+// allowance, worked out by solving the chain again.
+type Remedy struct {
+	Part    string
+	Unit    string // SI, of Now and Becomes
+	Now     float64
+	Becomes float64 // or as far as was tried
+	// Reached reports whether the allowance is just met there; Relaxed whether it is met
+	// already, so that this is how far the part may be relaxed.
+	Reached, Relaxed bool
+	// What the chain is with it: the disturbance at the cathode and the spot, and the side
+	// effects. Disturbance and ripple are peak to peak.
+	Disturbance, Drop, DriveNeeded quantity.Voltage
+	Spot                           quantity.Length
+	// Held reports whether the drive holds the set voltage with it.
+	Held   bool
+	Stored quantity.Energy
+	Input  quantity.Power
+	// Unknown is why it could not be worked out; nil where it was.
+	Unknown error
+}
+
+// The search for a value: how far it goes, how near it comes, how often the chain is solved.
+const (
+	farthest  = 100.0 // times or parts of what is there
+	nearness  = 0.01
+	solutions = 5
+	firstStep = 4.0
+	feeble    = 0.02 // a change of the disturbance's logarithm that counts as none
+)
+
+// Remedies lists, part by part, what would bring the disturbance to just what the allowance
+// leaves; a lack where no allowance leaves anything, or the ripple was measured.
+func (e *Evidence) Remedies() ([]Remedy, error) {
+	return remember(e, "remedies", func() ([]Remedy, error) {
+		if !e.HasSupply() {
+			return nil, lack.Key("drive", "multiplier")
+		}
+		if m, err := e.Measured(); m != nil || err != nil {
+			return nil, lack.Failed("the ripple was measured: what a changed part makes of it is not known")
+		}
+		start, err := e.use()
+		if err != nil {
+			return nil, err
+		}
+		var all []Remedy
+		for _, k := range e.knobs() {
+			all = append(all, e.turn(k, start))
+		}
+		return all, nil
+	})
+}
+
+// use is the disturbance over what the allowance leaves for it.
+func (e *Evidence) use() (float64, error) {
+	a, err := e.Allowed()
+	if err != nil {
+		return 0, err
+	}
+	if a.Scale == 0 {
+		return 0, lack.Failed("the allowance leaves nothing for any disturbance")
+	}
+	return 1 / a.Scale, nil
+}
+
+// turn seeks the factor of a knob with which use is one: by secants of the logarithms,
+// since ripple goes with powers of most values.
+func (e *Evidence) turn(k knob, start float64) Remedy {
+	r := Remedy{Part: k.name, Unit: k.unit, Now: k.now, Relaxed: start <= 1}
+	b := math.Log(firstStep)
+	if k.more == r.Relaxed {
+		b = -b
+	}
+	bound := math.Copysign(math.Log(farthest), b)
+	a, ua := 0.0, math.Log(start)
+	for range solutions {
+		x := e.Changed(k.change(math.Exp(b)))
+		used, err := x.use()
+		if err != nil {
+			if r.Becomes == 0 { // else it cannot be carried further than before
+				r.Unknown = err
+			}
+			return r
+		}
+		ub := math.Log(used)
+		r = x.effects(r, k.now*math.Exp(b))
+		if r.Reached = math.Abs(ub) < nearness; r.Reached {
+			return r
+		}
+		beyond := (ub < 0) == r.Relaxed // it would have to go further still
+		if beyond && quantity.Equal(b, bound) {
+			return r
+		}
+		next := bound
+		if math.Abs(ub-ua) > feeble*math.Abs(b-a) {
+			next = b - ub*(b-a)/(ub-ua)
+		}
+		if !(next/bound > 0 && next/bound < 1) {
+			next = bound
+		}
+		a, ua, b = b, ub, next
+	}
+	return r
+}
+
+// change turns the knob by a factor.
+func (k knob) change(factor float64) Change {
+	return Change{Name: fmt.Sprintf("%s times %.12g", k.name, factor), Edit: func(c *chain.Chain) { k.set(c, factor) }}
+}
+
+// effects notes what the changed chain is.
+func (e *Evidence) effects(r Remedy, becomes float64) Remedy {
+	r.Becomes = becomes
+	set := func(err error) {
+		if err != nil && r.Unknown == nil {
+			r.Unknown = err
+		}
+	}
+	s, err := e.Spot()
+	set(err)
+	r.Disturbance, r.Spot = s.Disturbance.PeakToPeak, s.TotalFW50
+	top, err := e.Potential("multiplier")
+	set(err)
+	out, err := e.Potential("output")
+	set(err)
+	r.Drop = magnitude(top) - magnitude(out)
+	if r.DriveNeeded, err = e.drive(); err != nil {
+		set(err)
+	}
+	r.Held = quantity.AtMost(float64(r.DriveNeeded), float64(e.chain.Drive.Peak.V))
+	r.Stored, err = e.StoredEnergy()
+	set(err)
+	r.Input, err = e.InputPower()
+	set(err)
+	return r
+}
+
+// drive is the peak that holds the set voltage, in an open loop that of the drive.
+func (e *Evidence) drive() (quantity.Voltage, error) {
+	if e.chain.Regulation == nil {
+		return e.chain.Drive.Peak.V, nil
+	}
+	return e.PeakNeeded()
+}

@@ -1,11 +1,14 @@
 package chain
 
-import "kilovet/hv/quantity"
+import (
+	"kilovet/hv/document"
+	"kilovet/hv/quantity"
+)
 
 // checkBeam holds the keys of the beam against its particle.
 func checkBeam(s *survey) {
 	b := s.Beam
-	if b == nil || !s.sound(b.Particle.Place) && b.Particle.Set() {
+	if b == nil || b.Particle.Place.Line > 0 && !s.sound(b.Particle.Place) {
 		return
 	}
 	ions := b.Particle.V == "ion"
@@ -33,10 +36,10 @@ func checkAdjustment(s *survey) {
 	if b == nil || !s.sound(b.Kind.Place) {
 		return
 	}
-	ordered(s, b.Lowest.Place.Line > 0, b.Lowest.V, b.Highest.V, b.Highest.Set(), func(text string) {
+	ordered(s, b.Lowest, b.Highest, func(text string) {
 		s.fault(b.Highest.Place, "the upper end is not above the lower one of "+text, "exchange the two")
 	})
-	ordered(s, b.LowestResistance.Place.Line > 0, b.LowestResistance.V, b.HighestResistance.V, b.HighestResistance.Set(), func(text string) {
+	ordered(s, b.LowestResistance, b.HighestResistance, func(text string) {
 		s.fault(b.HighestResistance.Place, "the upper end is not above the lower one of "+text, "exchange the two")
 	})
 	if b.Kind.V == "self" && (b.Lowest.Set() || b.Highest.Set()) {
@@ -48,8 +51,8 @@ func checkAdjustment(s *survey) {
 	}
 }
 
-func ordered[Q quantity.Number](s *survey, low bool, lowest, highest Q, high bool, fault func(string)) {
-	if s.legible && low && high && !(highest > lowest) {
-		fault(quantity.Text(lowest))
+func ordered[Q quantity.Number](s *survey, lowest, highest document.Given[Q], fault func(string)) {
+	if s.sound(lowest.Place) && s.sound(highest.Place) && !(highest.V > lowest.V) {
+		fault(quantity.Text(lowest.V))
 	}
 }

@@ -100,16 +100,35 @@ func (r Record) parted(name string, first int) (fast, slow []Line, err error) {
 	return fast, slow, err
 }
 
-// strongest is the frequency of the greatest tone among the entries of a spectrum.
+// strongest is the frequency of the greatest tone among the entries of a spectrum, between
+// two of them where its neighbours say so.
 func (r Record) strongest(low, high int) quantity.Frequency {
-	var most Tone
-	for k, tone := range r.Spectrum() {
-		if k+1 >= low && k+1 < high && tone.Amplitude > most.Amplitude {
-			most = tone
+	tones := r.Spectrum()
+	at := -1
+	for k := max(low-1, 0); k < min(high-1, len(tones)); k++ {
+		if at < 0 || tones[k].Amplitude > tones[at].Amplitude {
+			at = k
 		}
 	}
-	if most.Frequency == 0 {
+	if at < 0 {
 		return quantity.Frequency(float64(low) / float64(r.Duration()))
 	}
-	return most.Frequency
+	return tones[at].Frequency + quantity.Frequency(peakOffset(tones, at)/float64(r.Duration()))
+}
+
+// peakOffset is how far from an entry of a windowed spectrum its peak lies, in entries: the
+// top of the parabola through the logarithms of three.
+func peakOffset(tones []Tone, at int) float64 {
+	if at == 0 || at == len(tones)-1 {
+		return 0
+	}
+	left, middle, right := float64(tones[at-1].Amplitude), float64(tones[at].Amplitude), float64(tones[at+1].Amplitude)
+	if left <= 0 || middle <= 0 || right <= 0 {
+		return 0
+	}
+	bend := math.Log(left) - 2*math.Log(middle) + math.Log(right)
+	if bend >= 0 {
+		return 0
+	}
+	return (math.Log(left) - math.Log(right)) / (2 * bend)
 }

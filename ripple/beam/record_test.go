@@ -51,6 +51,22 @@ func TestRecordIsPartedByTheTime(t *testing.T) {
 	lacking(t, "no time", err, lack.Missing)
 }
 
+// A tone between two entries of the spectrum is named within a twentieth of their distance
+// (the parabola through a raised cosine's logarithms, derived).
+func TestToneBetweenTwoEntries(t *testing.T) {
+	r := Record{Interval: 1e-5}
+	for i := range 5000 {
+		r.Samples = append(r.Samples, quantity.Voltage(math.Sin(2*math.Pi*130*float64(i)*1e-5)))
+	}
+	fast, _, err := r.Lines("measured", 1)
+	if err != nil {
+		t.Fatal(err)
+	}
+	if f := float64(fast[0].Frequency); math.Abs(f-130) > 1 {
+		t.Errorf("130 Hz in steps of 20 Hz is named %g Hz", f)
+	}
+}
+
 // Parts add up to the whole, and their variances too.
 func TestPartsOfARecordAddUp(t *testing.T) {
 	fast, slow, err := recorded().Lines("measured", 3e-3)

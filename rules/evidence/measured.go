@@ -35,7 +35,7 @@ func (m *Measured) PeakToPeak() quantity.Voltage {
 func (m *Measured) Sampled() int { return len(m.trace.Times) }
 
 // mostSamples is how many samples of a record are followed to the blur.
-const mostSamples = 1 << 13
+const mostSamples = 1 << 16
 
 // Measured is the measured ripple, that of the working state; nil where none is described.
 func (e *Evidence) Measured() (*Measured, error) {
@@ -65,9 +65,12 @@ func (e *Evidence) DisturbanceAssumptions() []string {
 	if m == nil || err != nil {
 		return e.RippleAssumptions()
 	}
-	lasts := m.Record.Duration()
-	if quantity.AtLeast(float64(lasts), float64(e.averaging())) {
-		return nil
+	var all []string
+	if lasts := m.Record.Duration(); !quantity.AtLeast(float64(lasts), float64(e.averaging())) {
+		all = append(all, "nothing disturbs the beam that is slower than the measured record of "+quantity.Text(lasts))
 	}
-	return []string{"nothing disturbs the beam that is slower than the measured record of " + quantity.Text(lasts)}
+	if m.Sampled() > len(m.Record.Samples) {
+		all = append(all, fmt.Sprintf("the measured record is followed in %d of its %d samples", len(m.Record.Samples), m.Sampled()))
+	}
+	return all
 }

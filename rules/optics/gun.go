@@ -21,7 +21,10 @@ var cutoff = rule.Rule{
 	Example: rule.Example{
 		Swaps: []rule.Swap{{Was: `work_function       = "4.5 eV"`, Becomes: `work_function       = "4.5 eV"
 geometry = { aperture_radius = "0.5 mm", plate_thickness = "0.2 mm", tip_radius = "60 um", setback = "0.3 mm", anode_distance = "10 mm" }`}},
-		Changes: []rule.Change{{Rule: "gun.cutoff", Subject: "gun", Verdict: rule.Fails}},
+		Changes: []rule.Change{{Rule: "gun.cutoff", Subject: "gun", Verdict: rule.Fails},
+			{Rule: "field.strength", Subject: "gun/cathode", Verdict: rule.Marginal}, {Rule: "field.breakdown", Subject: "gun/cathode", Verdict: rule.Marginal},
+			{Rule: "field.strength", Subject: "gun/control electrode", Verdict: rule.Marginal}, {Rule: "field.breakdown", Subject: "gun/control electrode", Verdict: rule.Marginal},
+			{Rule: "field.strength", Subject: "gun/anode", Verdict: rule.Marginal}, {Rule: "field.breakdown", Subject: "gun/anode", Verdict: rule.Marginal}},
 	},
 	Judge: func(e *evidence.Evidence) rule.Judgement {
 		g := e.Chain().Gun

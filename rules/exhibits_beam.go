@@ -16,7 +16,7 @@ func pathsTable(e *evidence.Evidence) []exhibit.Table {
 		ID: "beam.paths", Chapter: exhibit.Beam, Title: "Paths to the beam", Basis: "ripple.phasor",
 		Columns: []exhibit.Column{{Head: "path"}, {Head: "what"}, {Head: "frequency", Unit: "Hz"}, {Head: "cathode to anode", Unit: "V"},
 			{Head: "across the bias", Unit: "V"}, {Head: "of the emission", Unit: "1"}, {Head: "what it does"}},
-		Note: "Peak to peak, of noise rms. The ways of one harmonic may add or take away from each other.",
+		Note: "Peak to peak, of noise rms; drift is that of an exposure. The ways of one harmonic may add or take away from each other. Hum keeps step with the mains.",
 	}
 	for _, p := range e.Paths() {
 		row := []exhibit.Cell{exhibit.Words(p.Name), exhibit.Words(p.What)}
@@ -48,7 +48,7 @@ func effect(e *evidence.Evidence, p evidence.Path) string {
 	if text != "" {
 		text += "; "
 	}
-	return text + "hum, keeps step with the mains"
+	return text + "hum"
 }
 
 // spotTable lists the terms of the spot, their shares, and widths of energy.

@@ -105,8 +105,8 @@ func (e *Evidence) drivePaths() []Path {
 		}
 		order := fmt.Sprint(k + 1)
 		all = append(all,
-			path("drive."+order+"/filter", ordinal(k+1)+" harmonic through filters and cable", through),
-			path("drive."+order+"/pickup", ordinal(k+1)+" harmonic as pickup past the filter", past))
+			path("drive."+order+"/filter", ordinal(k+1)+" harmonic, filters and cable", through),
+			path("drive."+order+"/pickup", ordinal(k+1)+" harmonic, pickup past the filter", past))
 	}
 	return all
 }
@@ -127,7 +127,7 @@ func (e *Evidence) humPaths() []Path {
 	if h == nil || h.Feed != nil && h.Feed.Kind.V == "battery" {
 		return nil
 	}
-	what := "common mode of the mains through the heater feed"
+	what := "common mode through the heater feed"
 	if h.Feed != nil && h.Feed.Screen.V {
 		what += ", screened"
 	}
@@ -148,18 +148,18 @@ func (e *Evidence) heaterPaths() []Path {
 		if v == 0 && err == nil {
 			return nil
 		}
-		return []Path{{Name: "heater/ripple", What: "ripple of the heater's DC at the tip", Frequency: f, Voltage: 2 * v, Bias: 2 * v, Unknown: err}}
+		return []Path{{Name: "heater/ripple", What: "DC heater: its ripple at the tip", Frequency: f, Voltage: 2 * v, Bias: 2 * v, Unknown: err}}
 	}
-	tip := Path{Name: "heater/tip", What: "AC heater: swing of the tip, centre resistors at the ends of their tolerance"}
+	tip := Path{Name: "heater/tip", What: "AC heater: tip, resistors at the ends of their tolerance"}
 	if h.CentreResistors == nil {
-		tip.What = "AC heater: swing of the tip, one leg being the return"
+		tip.What = "AC heater: tip, one leg the return"
 	}
 	v, err := e.TipSwingAtWorst()
 	if err == nil {
 		tip.Frequency, err = e.heaterFrequency()
 	}
 	tip.Voltage, tip.Bias, tip.Unknown = 2*v, 2*v, err
-	warm := Path{Name: "heater/temperature", What: "AC heater: swing of its temperature, hence of the emission"}
+	warm := Path{Name: "heater/temperature", What: "AC heater: its temperature"}
 	w, err := e.TemperatureSwing()
 	warm.Frequency, warm.Bias, warm.Unknown = w.Frequency, w.Bias, err
 	warm.Emission = w.Emission
@@ -186,10 +186,10 @@ func (e *Evidence) driftPaths() []Path {
 }
 
 var driftWords = map[string]string{
-	"divider/temperature":       "divider: its coefficients over the change of air within an exposure",
-	"reference/temperature":     "reference and amplifier over the change of air within an exposure",
-	"regulation/stability":      "reference and amplifier over an exposure at even temperature",
-	"bias resistor/temperature": "bias resistor over the change of air within an exposure",
+	"divider/temperature":       "divider, as the air changes",
+	"reference/temperature":     "reference, as the air changes",
+	"regulation/stability":      "reference, by itself",
+	"bias resistor/temperature": "bias resistor, as the air changes",
 }
 
 // noisePaths are resistor and emission noise across the bias.
@@ -215,7 +215,7 @@ func (e *Evidence) measuredPaths() []Path {
 	if m == nil && err == nil {
 		return nil
 	}
-	p := Path{Name: "measured", What: "measured at the cathode; in place of what is computed", Unknown: err}
+	p := Path{Name: "measured", What: "measured, in place of ripple and hum", Unknown: err}
 	if m != nil {
 		lines, _, err := m.Record.Lines("measured", m.Record.Duration())
 		p.Voltage, p.Unknown = m.PeakToPeak(), err
@@ -233,13 +233,13 @@ func (e *Evidence) Within(p Path) string {
 	case p.Noise:
 		return "blurs"
 	case p.Drift:
-		return "drifts within an exposure"
+		return "drifts"
 	case b == nil || !b.Exposure.Set() && !b.Dwell.Set():
 		return ""
 	case !quantity.AtLeast(float64(p.Frequency)*float64(e.averaging()), 1):
-		return "bands: slower than " + quantity.Text(e.averaging())
+		return "bands"
 	case b.Dwell.Set() && !quantity.AtLeast(float64(p.Frequency)*float64(b.Dwell.V), 1):
-		return "blurs within the exposure, bands within the dwell"
+		return "blurs; bands in a dwell"
 	}
 	return "blurs"
 }

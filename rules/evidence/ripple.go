@@ -258,6 +258,11 @@ func (e *Evidence) RippleAssumptions() []string {
 	if h := c.Heater; h != nil && h.Feed != nil && h.Feed.Screen.V && h.Feed.CommonMode.V > 0 {
 		all = append(all, "the screen of the heater feed divides the coupled common mode by "+fmt.Sprint(circuit.ScreenFactor))
 	}
+	if c.Gun.IsFitted() && e.alternatingHeater() && e.biasMovesCathode() {
+		if _, err := e.TemperatureSwing(); err != nil {
+			all = append(all, "an AC heater's swing of temperature leaves the emission alone: "+err.Error())
+		}
+	}
 	if e.CutoffByGeometry() {
 		all = append(all, "the cutoff is the estimate from the gun's geometry")
 	} else if c.Gun.IsFitted() && c.Gun.Emission.Set() && !c.Gun.Cutoff.Set() && !e.DiodeGun() {

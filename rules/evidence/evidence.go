@@ -16,7 +16,7 @@ type Evidence struct {
 	condition Condition
 	memory    *memory
 	trace     *trace.Trace // of the measured ripple; nil where none was read
-	near      *Evidence    // of the chain before it was changed, to start from; nil for the described one
+	before    *Evidence    // of the chain before it was changed, to start from; nil for the described one
 }
 
 // New starts the evidence for a chain in working state, with an empty memory.
@@ -44,7 +44,7 @@ func (e *Evidence) Changed(c Change) *Evidence {
 		copied := *e.chain
 		c.Edit(&copied)
 		with := New(&copied)
-		with.condition, with.trace, with.near = e.condition, e.trace, e
+		with.condition, with.trace, with.before = e.condition, e.trace, e
 		return with, nil
 	})
 	return changed

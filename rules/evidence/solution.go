@@ -41,8 +41,8 @@ func (e *Evidence) holds() bool {
 // alike is the state of the nominal chain, whole and at full drive, to start from; nil
 // where this is the one, or where it has none.
 func (e *Evidence) alike() *network.Periodic {
-	if e.near != nil {
-		if s, err := e.near.Under(e.condition).solution(); err == nil {
+	if e.before != nil {
+		if s, err := e.before.Under(e.condition).solution(); err == nil {
 			return s.Periodic
 		}
 		return nil

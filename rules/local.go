@@ -40,13 +40,13 @@ func localTable(outcomes []local.Outcome) []exhibit.Table {
 	}
 	t := exhibit.Table{
 		ID: "local.limits", Chapter: exhibit.Chain, Title: "Local limits and relaxations",
-		Columns: []exhibit.Column{{Head: "rule"}, {Head: "of"}, {Head: "value"}, {Head: "from"}, {Head: "result"}, {Head: "why"}},
+		Columns: []exhibit.Column{{Head: "rule and subject"}, {Head: "value and source"}, {Head: "result and reason"}},
 		Basis:   "the file of local limits",
 		Note:    "Local limits can only be stricter. What was read in a standard, and what concerns life, is never relaxed.",
 	}
 	for _, o := range outcomes {
-		t.Rows = append(t.Rows, []exhibit.Cell{exhibit.Words(o.Rule), exhibit.Words(strings.Join(o.Subjects, "; ")),
-			exhibit.Words(o.Value), exhibit.Words(o.From), exhibit.Words(string(o.Result)), exhibit.Words(o.Because)})
+		t.Rows = append(t.Rows, []exhibit.Cell{exhibit.Words(o.Rule + ": " + strings.Join(o.Subjects, "; ")),
+			exhibit.Words(o.Kind + ", " + o.Value + ": " + o.From), exhibit.Words(string(o.Result) + ": " + o.Because)})
 	}
 	return []exhibit.Table{t}
 }

@@ -115,14 +115,15 @@ func dispositionTable(c *chain.Chain, findings []rule.Finding) []exhibit.Table {
 	}
 	t := exhibit.Table{
 		ID: "signoff.dispositions", Chapter: exhibit.Chain, Title: "Dispositions of open points",
-		Columns: []exhibit.Column{{Head: "rule"}, {Head: "subject"}, {Head: "verdict"}, {Head: "disposition"}, {Head: "name"}, {Head: "reason"}, {Head: "record"}},
+		Columns: []exhibit.Column{{Head: "rule and subject"}, {Head: "verdict"}, {Head: "disposition"}, {Head: "reason and record"}},
 		Basis:   "[[accepted]] of the description",
 		Note:    "They change no verdict. A sheet to sign counts them, by the rules of kilovet signoff.",
 	}
 	d := signoff.Decide(c, findings, rule.Concerns)
 	row := func(a signoff.Disposition, subject, verdict string) {
-		t.Rows = append(t.Rows, []exhibit.Cell{exhibit.Words(a.Rule), exhibit.Words(subject), exhibit.Words(verdict), exhibit.Words(a.Word),
-			exhibit.Words(a.Name), exhibit.Words(a.Reason), exhibit.Words(strings.TrimSpace(a.Record + " " + a.Measurement))})
+		record := strings.Trim(a.Record+": "+a.Measurement, ": ")
+		t.Rows = append(t.Rows, []exhibit.Cell{exhibit.Words(strings.TrimSuffix(a.Rule+": "+subject, ": ")), exhibit.Words(verdict),
+			exhibit.Words(a.Word + " by " + a.Name), exhibit.Words(strings.TrimSuffix(a.Reason+"; "+record, "; "))})
 	}
 	for _, p := range d.Points {
 		if p.Disposition != nil {

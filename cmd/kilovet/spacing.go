@@ -24,8 +24,14 @@ func spacingCommand(w world) *cobra.Command {
 		Use:   "spacing --medium MEDIUM --voltage VOLTAGE [flags]",
 		Short: "Judge one gap from flags, or find the distance it needs",
 		Long:  aboutSpacing,
-		Args:  cobra.NoArgs,
-		RunE:  func(*cobra.Command, []string) error { return g.run() },
+		Example: `  kilovet spacing --voltage '20 kV' --medium air --clearance '60 mm' \
+      --creepage '150 mm' --material alumina \
+      --altitude '240 m' --air-temperature '30 degC' --pollution-degree 2
+  kilovet spacing --voltage 20kV --medium air --clearance 60mm \
+      --shape 'coaxial inner_radius=3mm outer_radius=63mm' --altitude 240m
+  kilovet spacing --voltage 20kV --medium vacuum --shape plates`,
+		Args: cobra.NoArgs,
+		RunE: func(*cobra.Command, []string) error { return g.run() },
 	}
 	flags := command.Flags()
 	g.gap = newGapFlags(flags)
@@ -39,14 +45,7 @@ const aboutSpacing = `Judge one gap by the tables of the standards and by physic
 flags are the keys of [[spacing]] and [site]; the block that they make is reviewed
 by the rules of kilovet review, and printed to be pasted into a description.
 
-  kilovet spacing --voltage '20 kV' --medium air --clearance '60 mm' \
-      --creepage '150 mm' --material alumina \
-      --altitude '240 m' --air-temperature '30 degC' --pollution-degree 2
-  kilovet spacing --voltage 20kV --medium air --clearance 60mm \
-      --shape 'coaxial inner_radius=3mm outer_radius=63mm' --altitude 240m
-  kilovet spacing --voltage 20kV --medium vacuum --shape plates
-
-The last has no clearance: the distance that each rule needs is computed, and what
+The last of the examples has no clearance: the distance that each rule needs is computed, and what
 cannot be judged without a clearance is unassessed.
 
 Exit status: as of kilovet review; 2 where the flags describe no gap.`

@@ -23,7 +23,7 @@ type Answer struct {
 // Bounds of a search for a dimension: solutions, and how far from the present value.
 const (
 	mostTries    = 4
-	farthest     = 4.0
+	resizedMost  = 4.0
 	littleStep   = 1.04
 	leastPower   = 0.03
 	justMet      = 0.97 // of what is allowed, from which a dimension serves
@@ -92,7 +92,7 @@ func (e *Evidence) search(d build.Dimension, weak Weak, asked, power float64) (q
 	for range mostTries {
 		aim := math.Sqrt(justMet) // between what serves and what is allowed
 		next := last * math.Pow(aim/demand, 1/power)
-		if !(next < farthest*float64(d.Value) && next > float64(d.Value)/farthest) {
+		if !(next < resizedMost*float64(d.Value) && next > float64(d.Value)/resizedMost) {
 			return 0, lack.Range("not even a fourth or four times as much is enough")
 		}
 		t, err := e.try(d, quantity.Length(next), weak)

@@ -33,7 +33,7 @@ type Remedy struct {
 
 // The search for a value: how far it goes, how near it comes, how often the chain is solved.
 const (
-	farthest  = 100.0 // times or parts of what is there
+	turnedBy  = 100.0 // times or parts of what is there
 	nearness  = 0.01
 	solutions = 5
 	firstStep = 4.0
@@ -82,7 +82,7 @@ func (e *Evidence) turn(k knob, start float64) Remedy {
 	if k.more == r.Relaxed {
 		b = -b
 	}
-	bound := math.Copysign(math.Log(farthest), b)
+	bound := math.Copysign(math.Log(turnedBy), b)
 	a, ua := 0.0, math.Log(start)
 	for range solutions {
 		x := e.Changed(k.change(math.Exp(b)))

@@ -8,6 +8,7 @@ import (
 	"kilovet/hv/trace"
 	"kilovet/rules/diagram"
 	"kilovet/rules/evidence"
+	"kilovet/rules/fault"
 	"kilovet/rules/fields"
 	"kilovet/rules/local"
 	"kilovet/rules/optics"
@@ -23,7 +24,7 @@ import (
 // All lists every rule, in the order in which findings are given.
 func All() []rule.Rule {
 	var all []rule.Rule
-	for _, family := range [][]rule.Rule{people.Rules(), radiation.Rules(), spacing.Rules(), fields.Rules(), vessel.Rules(), parts.Rules(), supply.Rules(), optics.Rules()} {
+	for _, family := range [][]rule.Rule{people.Rules(), radiation.Rules(), spacing.Rules(), fields.Rules(), vessel.Rules(), parts.Rules(), supply.Rules(), optics.Rules(), fault.Rules()} {
 		all = append(all, family...)
 	}
 	return all

@@ -105,6 +105,7 @@ type Cable struct {
 	Capacitance    document.Given[quantity.LinearCapacitance] `key:"capacitance" range:"> 0 F/m, <= 100 nF/m" means:"capacitance per length" example:"110 pF/m"`
 	RatedVoltage   document.Given[quantity.Voltage]           `key:"rated_voltage" range:"> 0 V, <= 1 MV" means:"rated DC voltage" example:"30 kV"`
 	GunEndResistor *Resistor                                  `key:"gun_end_resistor" means:"series resistor at the gun end"`
+	ScreenEarths   document.Given[int]                        `key:"screen_earths" range:">= 0, <= 2" means:"ends at which the screen is bolted to earth" example:"2"`
 }
 
 // Load is any load beside divider, bleeder and gun.

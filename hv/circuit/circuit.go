@@ -98,6 +98,8 @@ type Element struct {
 	CapacitorPart *chain.Capacitor
 	DiodePart     *chain.Diode
 	LoosePart     *chain.Part
+	// Uneven says how one element of a resistor of many differs; zero where all are alike.
+	Uneven Uneven
 
 	from, to string // names of the ends, kept for edits
 }

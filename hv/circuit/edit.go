@@ -29,7 +29,7 @@ func (c *Circuit) OpenString(name string) *Circuit {
 		return c.Open(name)
 	}
 	rise := quantity.Resistance(strings) / quantity.Resistance(strings-1)
-	return c.With(name, func(e *Element) { e.Resistance *= rise })
+	return c.With(name, func(e *Element) { e.Resistance, e.Uneven.Lost = e.Resistance*rise, 1 })
 }
 
 // Short is the circuit with one element replaced by an ideal connection.

@@ -140,15 +140,3 @@ func valued(e Element) bool {
 	}
 	return v >= 0 && v <= 1e300
 }
-
-// OneElement is the resistance of count elements in series in each of a number of
-// strings, one element of which has a number of times its value, over that of the whole
-// arm: exact, for 0 to any number of times.
-func OneElement(count, strings int, times float64) float64 {
-	n, s := float64(count), float64(strings)
-	odd := (n - 1 + times) / n // of one string
-	if odd == 0 {
-		return 0
-	}
-	return s / (s - 1 + 1/odd)
-}

@@ -10,65 +10,72 @@ import (
 
 // leakages are the conductances that diodes are lent, in parts of frequency times the
 // smallest fitted capacitance, where a state is not reached with their own: parts of a
-// ladder that an open diode cuts off are tied down by leakage alone.
-var leakages = []float64{1e-3, 2e-4, 2e-5, 1e-5}
+// ladder that a fault cuts off are tied down by leakage alone.
+var leakages = []float64{2e-2, 1e-2, 2e-3, 1e-3, 4e-4, 1e-4, 2e-5}
 
-// agreed is the part of the drive by which two states may differ that count as one.
-const agreed = 0.01
+// cut is the first of them that serves where the ladder is cut in two: more would bridge
+// the cut.
+const cut = 2
 
-// reach finds the steady state, and where it is not reached that with more leakage of the
-// diodes, if it no longer rests on how much; if it does, leakage is led back to their own.
-func reach(c *circuit.Circuit, o Options) (*Periodic, error) {
-	p, err := Steady(c, o)
-	if err != nil && o.From != nil {
-		p, err = Steady(c, Options{Frequency: o.Frequency})
+// agreed is the part of the largest voltage by which a state may differ from that without
+// the leakage lent.
+const agreed = 0.02
+
+// reacher finds the steady state of a circuit in which something has failed.
+type reacher struct {
+	failed string // part that leaks what it leaks
+	dead   bool   // nothing feeds the loads: parts of the ladder are cut off
+}
+
+// reach finds the steady state, and where it is not reached, or is known to be far, that
+// with more leakage of the diodes, if it no longer rests on how much.
+func (r reacher) reach(c *circuit.Circuit, o Options) (*Periodic, error) {
+	if !r.dead {
+		p, err := Steady(c, o)
+		if err != nil && o.From != nil {
+			p, err = Steady(c, Options{Frequency: o.Frequency})
+		}
+		if err == nil {
+			return p, nil
+		}
 	}
-	if err == nil {
+	if p := r.lend(c, o); p != nil {
 		return p, nil
 	}
+	return Steady(c, Options{Frequency: o.Frequency})
+}
+
+// lend finds the state with leakage lent to the diodes, where two amounts of it give the
+// same.
+func (r reacher) lend(c *circuit.Circuit, o Options) *Periodic {
 	unit := leakUnit(c, o)
-	part := 0.0
-	var before, last *Periodic
-	for _, part = range leakages {
-		next, failed := Steady(leaking(c, part*unit), Options{Frequency: o.Frequency, From: last})
-		if failed != nil {
-			return nil, err
+	var last *Periodic
+	before := 0.0
+	parts := leakages
+	if r.dead {
+		parts = parts[cut:]
+	}
+	for _, part := range parts {
+		next, err := Steady(r.leaking(c, part*unit), Options{Frequency: o.Frequency})
+		if err != nil {
+			continue
 		}
-		before, last = last, next
+		// What differs goes with the leakage lent, so this much is still to go.
+		if last != nil && apart(last, next)*part/(before-part) <= agreed {
+			next.Assumptions = append(next.Assumptions, fmt.Sprintf("diodes leak no less than %s would: what the fault cuts off is tied down by leakage alone, and hardly rests on how much",
+				quantity.Text(quantity.Resistance(1/(part*unit)))))
+			return next
+		}
+		last, before = next, part
 	}
-	if alike(before, last) {
-		last.Assumptions = append(last.Assumptions, fmt.Sprintf("diodes leak no less than %s would: with less the state was not reached, and it does not rest on it",
-			quantity.Text(quantity.Resistance(1/(part*unit)))))
-		return last, nil
-	}
-	return lessAndLess(c, o, last, part*unit, err)
+	return nil
 }
 
-// lessAndLess takes the leakage that diodes were lent back by halves, to their own.
-func lessAndLess(c *circuit.Circuit, o Options, last *Periodic, lent float64, err error) (*Periodic, error) {
-	own := math.Inf(1)
-	for _, e := range c.Elements {
-		if e.Kind == circuit.Diode {
-			own = min(own, e.Rectifier.Leakage)
-		}
-	}
-	for lent > own && lent > 0 {
-		if lent /= 3; lent < 1e-4*own {
-			lent = 0
-		}
-		next, failed := Steady(leaking(c, lent), Options{Frequency: o.Frequency, From: last})
-		if failed != nil {
-			return nil, err
-		}
-		last = next
-	}
-	return last, nil
-}
-
-// leaking is the circuit with diodes that leak no less than a conductance.
-func leaking(c *circuit.Circuit, least float64) *circuit.Circuit {
+// leaking is the circuit with diodes that leak no less than a conductance, but for the one
+// that failed.
+func (r reacher) leaking(c *circuit.Circuit, least float64) *circuit.Circuit {
 	return c.Each(func(e *circuit.Element) bool {
-		if e.Kind == circuit.Diode {
+		if e.Kind == circuit.Diode && e.Name != r.failed {
 			e.Rectifier.Leakage = max(e.Rectifier.Leakage, least)
 		}
 		return true
@@ -92,24 +99,21 @@ func leakUnit(c *circuit.Circuit, o Options) float64 {
 	return float64(f) * least
 }
 
-// alike reports whether two states of one circuit are the same but for a hundredth of the
-// drive, in the mean of every node.
-func alike(a, b *Periodic) bool {
-	drive := 0.0
-	for _, e := range a.Circuit.Elements {
-		if e.Kind == circuit.Source && e.Role == circuit.Ladder {
-			drive = max(drive, math.Abs(float64(e.Wave.Amplitude)))
-		}
-	}
+// apart is the largest difference of two states of one circuit in the mean of a node, in
+// parts of the largest mean.
+func apart(a, b *Periodic) float64 {
+	most, largest := 0.0, 0.0
 	for n := 1; n < a.Circuit.Nodes(); n++ {
 		x, err := a.At(circuit.Node(n))
 		y, err2 := b.At(circuit.Node(n))
 		if err != nil || err2 != nil {
 			continue
 		}
-		if math.Abs(float64(x.Mean-y.Mean)) > agreed*drive {
-			return false
-		}
+		most = max(most, math.Abs(float64(x.Mean-y.Mean)))
+		largest = max(largest, math.Abs(float64(y.Mean)))
 	}
-	return true
+	if largest == 0 {
+		return 0
+	}
+	return most / largest
 }

@@ -15,6 +15,12 @@ type Settled struct {
 	Ended  []string // constant currents that nothing feeds any more
 }
 
+// Failed is the part that failed, where there is one.
+type Failed struct {
+	Part   string
+	Ladder bool // of the ladder, which it may cut in two
+}
+
 // mostSettling is how often a circuit may change until it is at rest.
 const mostSettling = 8
 
@@ -23,11 +29,12 @@ const mostSettling = 8
 // holds that voltage from then on, or nothing where the voltage alternates; and a load
 // of constant current that would have to be fed backwards, or that nothing feeds,
 // draws none. The error is that of Steady.
-func Settle(c *circuit.Circuit, o Options) (Settled, error) {
+func Settle(c *circuit.Circuit, failed Failed, o Options) (Settled, error) {
 	var s Settled
 	c, s.Ended = fed(c)
+	r := reacher{failed: failed.Part, dead: failed.Ladder && len(s.Ended) > 0}
 	for range mostSettling {
-		p, err := reach(c, o)
+		p, err := r.reach(c, o)
 		if err != nil {
 			unloaded, ended := withoutLoads(c)
 			if len(ended) == 0 {

@@ -18,10 +18,10 @@ import (
 // together to the end that raises it. Where regulation holds a node, what counts is the
 // value against the voltage of that node. That is a solution a part, shared among all
 // values of the state, and one for the corner; not every combination. All capacitors of
-// one column are one part.
+// one column are one part. With a fault it is the value under that.
 func Worst[Q ~float64](e *Evidence, names []string, value func(*Evidence, string) (Q, error)) (Extreme[Q], error) {
-	most, err := Largest(e, Ratings(), names, value)
-	if err != nil {
+	most, err := Largest(e, e.Ratings(), names, value)
+	if err != nil || e.failed() {
 		return most, err
 	}
 	return BySign(e, most, value)

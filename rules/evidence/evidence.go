@@ -118,6 +118,11 @@ type outcome[T any] struct {
 	err   error
 }
 
+// Remember computes a value once for each condition in a review; the name is its own.
+func Remember[T any](e *Evidence, name string, compute func() (T, error)) (T, error) {
+	return remember(e, "of rules: "+name, compute)
+}
+
 // remember computes a value once for each condition.
 func remember[T any](e *Evidence, name string, compute func() (T, error)) (T, error) {
 	key := memoryKey{e.condition.key(), name}

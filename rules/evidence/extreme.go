@@ -19,6 +19,15 @@ func Ratings() []Condition {
 	return all
 }
 
+// Ratings lists the conditions that ratings are judged under from here: with a fault the
+// one at hand, else every state in every corner.
+func (e *Evidence) Ratings() []Condition {
+	if e.failed() {
+		return []Condition{e.condition}
+	}
+	return Ratings()
+}
+
 // LostCorners lists the corners with regulation lost.
 func LostCorners() []Condition {
 	var all []Condition

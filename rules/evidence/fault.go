@@ -14,6 +14,14 @@ type Fault struct {
 	Name string
 	Edit func(*circuit.Circuit) *circuit.Circuit
 	Loop Loop
+	// Part is the element concerned, where there is one; Gone says that it is no part any
+	// more, so that its own ratings say nothing.
+	Part string
+	Gone bool
+	// Strains says that the regulation is likely to end at its limit: it is tried first.
+	Strains bool
+	// Cuts says that it cuts the ladder in two for direct current.
+	Cuts bool
 }
 
 // Loop is how the regulation answers a fault.
@@ -28,6 +36,10 @@ const (
 
 // failed reports whether something has failed under the condition.
 func (e *Evidence) failed() bool { return e.condition.Fault.Loop != Held }
+
+// Failed reports whether something has failed under the condition: then it is judged as a
+// single fault.
+func (e *Evidence) Failed() bool { return e.failed() }
 
 // Healthy is the evidence under the same condition without the fault.
 func (e *Evidence) Healthy() *Evidence {
@@ -63,6 +75,9 @@ func (e *Evidence) failure() (failure, error) {
 // unregulated is the peak of a drive that no regulation moves.
 func (e *Evidence) unregulated() (quantity.Voltage, error) {
 	share := e.condition.Drive
+	if e.condition.Peak != 0 {
+		return e.condition.Peak, nil
+	}
 	if e.condition.Fault.Loop == RunsAway && e.condition.Peak == 0 && (share == 0 || share == 1) {
 		return e.limit()
 	}
@@ -75,7 +90,7 @@ func (e *Evidence) settle(peak quantity.Voltage, from *network.Periodic) (failur
 	if err != nil {
 		return failure{}, err
 	}
-	s, err := network.Settle(trusted(c), network.Options{Frequency: e.chain.Drive.Frequency.V, From: from})
+	s, err := network.Settle(trusted(c), network.Failed{Part: e.condition.Fault.Part, Ladder: e.condition.Fault.Cuts}, network.Options{Frequency: e.chain.Drive.Frequency.V, From: from})
 	if err != nil {
 		return failure{}, err
 	}
@@ -85,7 +100,7 @@ func (e *Evidence) settle(peak quantity.Voltage, from *network.Periodic) (failur
 // regulated is where the regulation comes to rest: where its divider reads what it read
 // before, or at the limit of the drive where that is not enough.
 func (e *Evidence) regulated() (failure, error) {
-	const good = 1e-6
+	const good = 1e-4 // of the reading: far below what a divider is off
 	wanted, peak, err := e.wanted()
 	if err != nil {
 		return failure{}, err
@@ -151,6 +166,9 @@ func (e *Evidence) wanted() (reading, peak quantity.Voltage, err error) {
 	healthy := e.Healthy()
 	if peak, err = healthy.Peak(); err != nil {
 		return 0, 0, err
+	}
+	if limit, err := e.limit(); err == nil && e.condition.Fault.Strains {
+		peak = limit
 	}
 	p, err := healthy.solution()
 	if err != nil {

@@ -3,6 +3,7 @@ package evidence
 import (
 	"math"
 
+	"kilovet/hv/circuit"
 	"kilovet/hv/lack"
 	"kilovet/hv/quantity"
 	"kilovet/ripple/network"
@@ -129,11 +130,29 @@ func (e *Evidence) ElementPeak(name string) (quantity.Voltage, error) {
 }
 
 // ends are the nodes between which an element stands, or stood before a fault took it out.
-func (e *Evidence) ends(name string) (from, to string) {
-	if c, err := e.Circuit(); err == nil && c.Element(name) != nil {
-		return c.Element(name).Ends()
+func (e *Evidence) ends(name string) (from, to string) { return e.element(name).Ends() }
+
+// element is an element of the circuit under the condition, or as it was before a fault
+// took it out.
+func (e *Evidence) element(name string) *circuit.Element {
+	if e.failed() {
+		if c, err := e.Circuit(); err == nil && c.Element(name) != nil {
+			return c.Element(name)
+		}
 	}
-	return e.Layout().Element(name).Ends()
+	return e.Layout().Element(name)
+}
+
+// OnePeak is the largest voltage across any one element of a resistor that has several.
+func (e *Evidence) OnePeak(name string) (quantity.Voltage, error) {
+	v, err := e.ElementPeak(name)
+	return v * quantity.Voltage(e.element(name).Share()), err
+}
+
+// OnePower is the largest mean power in any one element of a resistor that has several.
+func (e *Evidence) OnePower(name string) (quantity.Power, error) {
+	p, err := e.ElementPower(name)
+	return p * quantity.Power(e.element(name).Heat()), err
 }
 
 // ElementCurrent is the magnitude of the mean current through a resistor or load.
@@ -170,7 +189,7 @@ func (e *Evidence) ReversePeak(name string) (quantity.Voltage, error) {
 // DiodeMean is the mean forward current of a diode.
 func (e *Evidence) DiodeMean(name string) (quantity.Current, error) {
 	d, err := e.diode(name)
-	return d.Mean, err
+	return max(0, d.Mean), err
 }
 
 // DiodePeak is the largest forward current of a diode, without that of its junction.

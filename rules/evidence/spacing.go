@@ -44,7 +44,11 @@ func (x Spacing) Surface() (quantity.Length, string, error) {
 
 // Spacing assesses a spacing at its highest voltage: the peak over all states and
 // corners, the lasting voltage over those that can stand for long.
+// With a fault it is that of all other conditions unless the fault raises the peak.
 func (e *Evidence) Spacing(s *chain.Spacing) (Spacing, error) {
+	if e.failed() {
+		return e.spacingInFault(s)
+	}
 	return remember(e.Under(Condition{}), "spacing "+s.Name.V, func() (Spacing, error) {
 		if s.Medium.V == "gas" {
 			if err := document.Need(s.Gas, s.Pressure); err != nil {
@@ -62,11 +66,30 @@ func (e *Evidence) Spacing(s *chain.Spacing) (Spacing, error) {
 	})
 }
 
+func (e *Evidence) spacingInFault(s *chain.Spacing) (Spacing, error) {
+	usual, err := e.Healthy().Spacing(s)
+	if err != nil || s.Voltage.Set() {
+		return usual, err
+	}
+	peak, err := Largest(e, e.Ratings(), nodesOf(s), func(e *Evidence, n string) (quantity.Voltage, error) { return e.Between(n, s.To.V) })
+	if err != nil || quantity.AtMost(peak.Value, usual.Voltages.Peak) {
+		return usual, err
+	}
+	return remember(e, "spacing "+s.Name.V, func() (Spacing, error) {
+		v := usual.Voltages
+		v.Peak = peak.Value
+		return Spacing{v, peak.Under, usual.Lasting, usual.Gap, insulation.Assess(usual.Gap, v)}, nil
+	})
+}
+
+// nodesOf are the nodes on the live side of a spacing.
+func nodesOf(s *chain.Spacing) []string { return append([]string{s.From.V}, s.Also.V...) }
+
 func (e *Evidence) across(s *chain.Spacing) (v gap.Voltages, under, long Condition, err error) {
 	if s.Voltage.Set() {
 		return gap.Voltages{Peak: s.Voltage.V, LongTerm: s.Voltage.V}, under, long, nil
 	}
-	live := append([]string{s.From.V}, s.Also.V...)
+	live := nodesOf(s)
 	peak, err := Worst(e, live, func(e *Evidence, n string) (quantity.Voltage, error) { return e.Between(n, s.To.V) })
 	if err != nil {
 		return v, under, long, err

@@ -4,6 +4,8 @@
 package fault
 
 import (
+	"strings"
+
 	"kilovet/hv/circuit"
 	"kilovet/rules/evidence"
 )
@@ -34,8 +36,9 @@ type Fault struct {
 	// Add is what helps against its consequences.
 	Add string
 
-	edit func(*circuit.Circuit) *circuit.Circuit
-	loop evidence.Loop
+	edit  func(*circuit.Circuit) *circuit.Circuit
+	loop  evidence.Loop
+	whole bool // the part is no part any more
 }
 
 // Condition is the chain at work with the fault.
@@ -45,7 +48,9 @@ func (f Fault) Condition() evidence.Condition {
 
 // Change is the fault as a change of the circuit.
 func (f Fault) Change() evidence.Fault {
-	return evidence.Fault{Name: f.Name, Edit: f.edit, Loop: f.loop}
+	return evidence.Fault{Name: f.Name, Edit: f.edit, Loop: f.loop, Part: f.Part, Gone: f.whole,
+		Strains: f.Kind != Value && strings.HasPrefix(f.Part, "multiplier"),
+		Cuts:    strings.HasPrefix(f.Part, "multiplier.diode") && f.Kind != Shorted}
 }
 
 // Of lists every fault and every error of assembly of a chain, in the order of its

@@ -5,7 +5,6 @@ import (
 
 	"kilovet/hv/chain"
 	"kilovet/hv/circuit"
-	"kilovet/hv/quantity"
 	"kilovet/rules/evidence"
 )
 
@@ -50,11 +49,11 @@ func (l *lister) element(el circuit.Element) {
 func loose(el circuit.Element) bool { return el.LoosePart != nil && el.LoosePart.Kind.V != "meter" }
 
 func (l *lister) open(name, class, add string) {
-	l.add(Fault{Class: class, Part: name, Kind: Open, Add: add, edit: func(c *circuit.Circuit) *circuit.Circuit { return c.Open(name) }})
+	l.add(Fault{Class: class, Part: name, Kind: Open, Add: add, whole: true, edit: func(c *circuit.Circuit) *circuit.Circuit { return c.Open(name) }})
 }
 
 func (l *lister) short(name, class, add string) {
-	l.add(Fault{Class: class, Part: name, Kind: Shorted, Add: add, edit: func(c *circuit.Circuit) *circuit.Circuit { return c.Short(name) }})
+	l.add(Fault{Class: class, Part: name, Kind: Shorted, Add: add, whole: true, edit: func(c *circuit.Circuit) *circuit.Circuit { return c.Short(name) }})
 }
 
 // pair lists a part open and shorted.
@@ -79,7 +78,8 @@ func (l *lister) capacitor(el circuit.Element) {
 	case strings.HasPrefix(el.Name, "filter."):
 		what = "filter capacitor"
 	}
-	l.add(Fault{Class: what + " open", Part: el.Name, Kind: Open, Add: add, edit: func(c *circuit.Circuit) *circuit.Circuit { return c.Broken(el.Name) }})
+	l.add(Fault{Class: what + " open", Part: el.Name, Kind: Open, Add: add, whole: true,
+		edit: func(c *circuit.Circuit) *circuit.Circuit { return c.Broken(el.Name) }})
 	l.short(el.Name, what+" shorted", add)
 }
 
@@ -98,17 +98,13 @@ func (l *lister) resistor(el circuit.Element) {
 	}
 	if count > 1 {
 		l.add(Fault{Name: el.Name + ": one element shorted", Class: what + ": one element shorted", Part: el.Name, Kind: Shorted, Add: add,
-			edit: scaled(el.Name, el.ResistorPart, 0)})
+			edit: oneOff(el.Name, 0)})
 	}
 }
 
-// scaled is a resistor of which one element is a number of times its value.
-func scaled(name string, part *chain.Resistor, times float64) func(*circuit.Circuit) *circuit.Circuit {
-	count, strings := part.Elements()
-	of := circuit.OneElement(count, strings, times)
-	return func(c *circuit.Circuit) *circuit.Circuit {
-		return c.With(name, func(e *circuit.Element) { e.Resistance *= quantity.Resistance(of) })
-	}
+// oneOff is a resistor of which one element is a number of times its value.
+func oneOff(name string, times float64) func(*circuit.Circuit) *circuit.Circuit {
+	return func(c *circuit.Circuit) *circuit.Circuit { return c.OneOff(name, times) }
 }
 
 func nameOf(el circuit.Element) (what, add string) {

@@ -122,7 +122,7 @@ func (l *lister) wrongValue(el circuit.Element, times float64) {
 	case el.Name == "divider.upper" || el.Name == "divider.lower":
 		f.Class = "divider element off by ten"
 		f.Name = fmt.Sprintf("%s: one element %g times its value", el.Name, times)
-		f.edit = scaled(el.Name, el.ResistorPart, times)
+		f.edit = oneOff(el.Name, times)
 	default:
 		return
 	}

@@ -18,6 +18,21 @@ type Derating struct {
 // Margin is the margin below the failing share at which a finding becomes marginal.
 func (d Derating) Margin() float64 { return float64(d.Fails/d.Marginal) - 1 }
 
+// InFault is how far a rating may be used in a single fault: all of it, marginal where
+// the usual share is passed. Common practice, no source.
+func (d Derating) InFault() Derating {
+	if d.Fails < 1 {
+		d.Marginal = d.Fails
+	}
+	return Derating{d.Marginal, 1, FaultSource}
+}
+
+// TripSource says where trips are set.
+var TripSource = practice("a trip stands above the working value with 5 % in hand and below what the parts bear, with a sensor that rests on nothing it guards")
+
+// FaultSource says why ratings count whole in a single fault.
+var FaultSource = practice("in a single fault no other part passes its rating; the usual shares are for what lasts")
+
 func practice(text string) rule.Source {
 	return rule.Source{Text: text, Mark: rule.Practice, Governs: true}
 }

@@ -18,6 +18,8 @@ const (
 	WaitingMargin = 0.25
 	// FeedTestComfort is the comfortable ratio of test voltage to highest working voltage.
 	FeedTestComfort = 1.5
+	// TripMargin is what the set point of a trip keeps in hand over the working value.
+	TripMargin = 0.05
 	// DistanceMargin is what distances keep in hand over the tables.
 	DistanceMargin = 0.10
 	// DescribedAbove is the voltage above which a node needs a described spacing to ground.

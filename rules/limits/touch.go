@@ -17,14 +17,19 @@ const (
 	TouchEnergy  quantity.Energy  = 350e-3 // above it
 	// ChargeRuleTo is where the limit changes from charge to energy.
 	ChargeRuleTo quantity.Voltage = 15e3
-	// FaultVoltage is the limit in single fault condition, DC.
+	// FaultVoltage is the limit in single fault condition, DC; FaultPeak that of the peak of
+	// an alternating voltage, FaultCurrent that of a direct current. The charge line of a
+	// single fault was not found: that of the normal condition judges.
 	FaultVoltage quantity.Voltage = 120
+	FaultPeak    quantity.Voltage = 70
+	FaultCurrent quantity.Current = 15e-3
 )
 
 // The sources of the touch limits.
 var (
 	TouchVoltageSource = rule.Source{Text: "IEC 61010-1:2010 6.3.1 a): 60 V DC, 42.4 V peak in normal condition", Mark: rule.Memory, Governs: true}
 	TouchFaultSource   = rule.Source{Text: "IEC 61010-1:2010 6.3.2 a): 120 V DC in single fault condition", Mark: rule.Memory, Governs: true}
+	FaultCurrentSource = rule.Source{Text: "IEC 61010-1 6.3.2 b): 15 mA DC in single fault condition (read in an analyser's limit table, edition 2)", Mark: rule.Read, Governs: true}
 	TouchCurrentSource = rule.Source{Text: "IEC 61010-1 6.3.1 b): 2 mA DC (read in an analyser's limit table, edition 2)", Mark: rule.Read, Governs: true}
 	TouchChargeSource  = rule.Source{Text: "IEC 61010-1 6.3.1 c): 45 µC up to 15 kV (read in a quotation; same figure in IEC 60335-1 8.1.4)", Mark: rule.Read, Governs: true}
 	TouchEnergySource  = rule.Source{Text: "350 mJ above 15 kV (read in IEC 60335-1 8.1.4 and EN 50191; in IEC 61010-1 from memory)", Mark: rule.Read, Governs: true}

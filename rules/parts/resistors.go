@@ -26,12 +26,8 @@ var resistorVoltage = rule.Rule{
 	Judge: func(e *evidence.Evidence) rule.Judgement {
 		return each(groups(e, isResistor), "no resistor is described", func(g group) rule.Finding {
 			part := ratingsOf(g.elements[0])
-			perElement := func(e *evidence.Evidence, name string) (quantity.Voltage, error) {
-				v, err := e.ElementPeak(name)
-				return v / quantity.Voltage(part.count), err
-			}
 			r := rating[quantity.Voltage]{what: "voltage of each element", rated: part.voltage.V, given: part.voltage.Set(), key: part.voltage.Key,
-				derating: limits.ResistorVoltage, stress: perElement, tolerance: &part.tolerance}
+				derating: limits.ResistorVoltage, stress: (*evidence.Evidence).OnePeak, tolerance: &part.tolerance}
 			return r.judge(e, g, about("resistor.voltage", rule.Equipment, g, part.voltage.Place))
 		})
 	},
@@ -61,12 +57,8 @@ func judgePower(e *evidence.Evidence, g group) rule.Finding {
 		f.Relation = rule.AtMost
 		return f.Lacking(err)
 	}
-	perElement := func(e *evidence.Evidence, name string) (quantity.Power, error) {
-		p, err := e.ElementPower(name)
-		return p / quantity.Power(part.count*part.strings), err
-	}
 	r := rating[quantity.Power]{what: "power of each element", rated: part.power.V * quantity.Power(share), given: part.power.Set(), key: part.power.Key,
-		derating: limits.ResistorPower, stress: perElement, tolerance: &part.tolerance}
+		derating: limits.ResistorPower, stress: (*evidence.Evidence).OnePower, tolerance: &part.tolerance}
 	return r.judge(e, g, f)
 }
 

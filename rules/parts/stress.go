@@ -33,7 +33,11 @@ func (r rating[Q]) judge(e *evidence.Evidence, g group, f rule.Finding) rule.Fin
 	if !r.given {
 		return f.Lacking(lack.Key(r.key))
 	}
-	most, err := r.worst(e, g)
+	names := g.left(e)
+	if len(names) == 0 {
+		return f
+	}
+	most, err := r.worst(e, names)
 	if err != nil {
 		return f.Lacking(err)
 	}
@@ -42,7 +46,11 @@ func (r rating[Q]) judge(e *evidence.Evidence, g group, f rule.Finding) rule.Fin
 	if r.tolerance != nil && !r.tolerance.Set() {
 		f = f.Assume("the value of " + g.subject + " is exact: its tolerance is not given")
 	}
-	f = f.ShareOf(rule.Of(r.rated)).Most(rule.Of(most.Value), rule.Of(Q(float64(r.rated)*float64(r.derating.Fails))), r.derating.Margin())
+	share := r.derating
+	if e.Failed() {
+		share = share.InFault()
+	}
+	f = f.ShareOf(rule.Of(r.rated)).Most(rule.Of(most.Value), rule.Of(Q(float64(r.rated)*float64(share.Fails))), share.Margin())
 	return f.WithoutRemedyIfMet()
 }
 
@@ -53,11 +61,14 @@ const wellBelow = 0.5
 // worst is the largest stress over conditions and elements; over every state and corner
 // it takes the corner by the sign of each part's sensitivity too, where the stress is not
 // well below what would be marginal.
-func (r rating[Q]) worst(e *evidence.Evidence, g group) (evidence.Extreme[Q], error) {
+func (r rating[Q]) worst(e *evidence.Evidence, names []string) (evidence.Extreme[Q], error) {
 	if r.conditions != nil {
-		return evidence.Largest(e, r.conditions, g.names(), r.stress)
+		return evidence.Largest(e, r.conditions, names, r.stress)
 	}
-	most, err := evidence.Largest(e, evidence.Ratings(), g.names(), r.stress)
+	if e.Failed() {
+		return evidence.Largest(e, e.Ratings(), names, r.stress)
+	}
+	most, err := evidence.Largest(e, evidence.Ratings(), names, r.stress)
 	if err != nil || float64(most.Value) <= wellBelow*float64(r.rated)*float64(r.derating.Marginal) {
 		return most, err
 	}

@@ -86,10 +86,26 @@ func touchLimit(e *evidence.Evidence, node string) (quantity.Voltage, error) {
 	if err != nil {
 		return 0, err
 	}
+	allowed := allowedIn(e)
 	if node == "mains" || !quantity.AtMost(swing/2, peak*limits.TouchRipple) {
-		return limits.TouchPeak, nil
+		return allowed.peak, nil
 	}
-	return limits.TouchVoltage, nil
+	return allowed.voltage, nil
+}
+
+// allowed is what may be touched.
+type allowed struct {
+	voltage, peak quantity.Voltage
+	current       quantity.Current
+	source        rule.Source // of the current
+}
+
+// allowedIn is what may be touched in the normal condition, or in a single fault.
+func allowedIn(e *evidence.Evidence) allowed {
+	if e.Failed() {
+		return allowed{limits.FaultVoltage, limits.FaultPeak, limits.FaultCurrent, limits.FaultCurrentSource}
+	}
+	return allowed{limits.TouchVoltage, limits.TouchPeak, limits.TouchCurrent, limits.TouchCurrentSource}
 }
 
 // limited judges a node above the touch voltage by its charge or energy; without a
@@ -109,7 +125,8 @@ func limited(e *evidence.Evidence, node string, v quantity.Voltage, f rule.Findi
 	if err != nil {
 		return f.Lacking(err)
 	}
-	f.Sources = append(f.Sources, limits.TouchCurrentSource)
+	allowed := allowedIn(e)
+	f.Sources = append(f.Sources, allowed.source)
 	f.Because += fmt.Sprintf("; the supply drives %s through 2 kΩ there", quantity.Text(current))
-	return f.Most(rule.Of(current), rule.Of(limits.TouchCurrent), 0)
+	return f.Most(rule.Of(current), rule.Of(allowed.current), 0)
 }

@@ -1,0 +1,209 @@
+package fault
+
+import (
+	"fmt"
+	"slices"
+	"strings"
+
+	"kilovet/hv/chain"
+	"kilovet/hv/circuit"
+	"kilovet/hv/lack"
+	"kilovet/rules/evidence"
+	"kilovet/rules/limits"
+	"kilovet/rules/rule"
+)
+
+var gaps = rule.Rule{
+	ID: "fault.spacing", Title: "Spacings in a single fault",
+	Demands: "What a single fault puts across a spacing neither breaks it down nor passes the clearance of the tables, unless an independent measure switches off.",
+	Applies: "Every spacing across which a fault puts more than any state does. Towards earthed metal and between parts it is marginal; it fails where the other side can be touched.",
+	Concern: rule.Life,
+	Sources: []rule.Source{faultSource},
+	Example: rule.Example{
+		Swaps:   []rule.Swap{{Was: "name       = \"stages 1 to 3\"\nfrom       = \"stage.1\"\nto         = \"stage.2\"\nalso       = [\"stage.3\"]\nmedium     = \"air\"\ninsulation = \"functional\"\nclearance  = \"18 mm\"", Becomes: "name       = \"stages 1 to 3\"\nfrom       = \"stage.1\"\nto         = \"stage.2\"\nalso       = [\"stage.3\"]\nmedium     = \"air\"\ninsulation = \"functional\"\nclearance  = \"60 mm\""}},
+		Changes: []rule.Change{{Rule: "fault.spacing", Subject: "stages 1 to 3", Verdict: rule.Meets}},
+	},
+	Judge: func(e *evidence.Evidence) rule.Judgement {
+		if !e.HasSupply() {
+			return rule.Over(noSupply)
+		}
+		var j rule.Judgement
+		for i := range e.Chain().Spacings {
+			if f, raised := judgeGap(e, &e.Chain().Spacings[i]); raised {
+				j.Findings = append(j.Findings, f)
+			}
+		}
+		if len(j.Findings) == 0 {
+			return rule.Over("no fault puts more across a described spacing than the states of the chain do")
+		}
+		return j
+	},
+}
+
+// judgeGap is the worst that any fault does to one spacing.
+func judgeGap(e *evidence.Evidence, s *chain.Spacing) (rule.Finding, bool) {
+	worst, by, found := worstOf(StudyAll(e), func(f rule.Finding) bool {
+		return strings.HasPrefix(f.Rule, "spacing.") && f.Subject == s.Name.V
+	})
+	if !found {
+		return rule.Finding{}, false
+	}
+	f := worst
+	f.Rule, f.Under, f.Because = "fault.spacing", by.Name, by.Name+": "+worst.Because
+	if f.Verdict == rule.Unassessed {
+		return f, true
+	}
+	f.Verdict = rule.Meets
+	if Share(worst) <= 1 {
+		return f.WithoutRemedyIfMet(), true
+	}
+	if m, caught := by.Caught(); caught {
+		f.Relation, f.Needed, f.Provided, f.Margin = rule.Presence, nil, nil, nil
+		f.Because += fmt.Sprintf("; the %s catches it: %s", m.Name, m.Because)
+		return f.WithoutRemedyIfMet(), true
+	}
+	f.Verdict = rule.Marginal
+	if touches(e, s) {
+		f.Verdict = rule.Fails
+	}
+	f.Because += "; nothing described catches it"
+	if by.Add != "" {
+		f.Remedy = by.Add + "; or " + f.Remedy
+	}
+	return f, true
+}
+
+// touches reports whether one side of a spacing can be touched.
+func touches(e *evidence.Evidence, s *chain.Spacing) bool {
+	var all []string
+	if a := e.Chain().Access; a != nil {
+		all = a.Touchable.V
+	}
+	return slices.Contains(all, s.To.V) || slices.Contains(all, s.From.V) || s.To.V == "mains" || s.From.V == "mains"
+}
+
+// worstOf finds the finding of a sort that uses most of what is allowed; one without an
+// answer counts as worse than any that is met.
+func worstOf(all []Outcome, sort func(rule.Finding) bool) (worst rule.Finding, by Outcome, found bool) {
+	for _, o := range all {
+		_, caught := o.Caught()
+		for _, f := range o.Findings {
+			if sort(f) && (!found || heavier(f, caught, worst, by)) {
+				worst, by, found = f, o, true
+			}
+		}
+	}
+	return worst, by, found
+}
+
+func heavier(f rule.Finding, caught bool, than rule.Finding, by Outcome) bool {
+	_, before := by.Caught()
+	a, b := weight(f, caught), weight(than, before)
+	if a != b {
+		return a > b
+	}
+	return Share(f) > Share(than)
+}
+
+// weight orders findings: passed and not caught, without an answer, passed and caught, met.
+func weight(f rule.Finding, caught bool) int {
+	switch {
+	case f.Verdict == rule.Fails && !caught:
+		return 3
+	case f.Verdict == rule.Unassessed:
+		return 2
+	case f.Verdict == rule.Fails:
+		return 1
+	}
+	return 0
+}
+
+var reached = rule.Rule{
+	ID: "fault.touch", Title: "Nodes within reach in a single fault",
+	Demands: "With any single fault a node within reach stays at or below 120 V DC, or limited in current, charge and energy.",
+	Applies: "Every node listed as touchable, the chassis, the screen of a cable, and the return of the multiplier where the enclosure is open.",
+	Concern: rule.Life,
+	Sources: []rule.Source{limits.TouchFaultSource, limits.FaultCurrentSource, limits.TouchChargeSource, limits.TouchEnergySource},
+	Example: rule.Example{
+		Swaps:   []rule.Swap{{Was: `clamp  = { voltage = "90 V", kind = "gas tube", leakage = "1 nA" }`, Becomes: `clamp  = { voltage = "90 V", kind = "gas tube", leakage = "1 nA" }`}},
+		Changes: []rule.Change{{Rule: "fault.touch", Subject: "divider.tap", Verdict: rule.Meets}},
+	},
+	Judge: func(e *evidence.Evidence) rule.Judgement {
+		if !e.HasSupply() {
+			return rule.Over(noSupply)
+		}
+		if a := e.Chain().Access; a == nil || !a.Touchable.Set() {
+			return rule.Over("what can be touched is not described; touch.voltage says so")
+		}
+		var j rule.Judgement
+		for _, node := range withinReach(e) {
+			if f, found := judgeReach(e, node); found {
+				j.Findings = append(j.Findings, f)
+			}
+		}
+		if len(j.Findings) == 0 {
+			return rule.Over("no node is within reach")
+		}
+		return j
+	},
+}
+
+// withinReach are the nodes that can be touched in any fault, each once.
+func withinReach(e *evidence.Evidence) []string {
+	var all []string
+	for _, node := range append(slices.Clone(e.Chain().Access.Touchable.V), "chassis", "cable.screen", "foot") {
+		closed := e.Chain().Access.Enclosure.Set() && e.Chain().Access.Enclosure.V != "open"
+		if !slices.Contains(all, node) && (node != "foot" || !closed) {
+			all = append(all, node)
+		}
+	}
+	return all
+}
+
+// judgeReach is the worst that any fault puts on one node within reach.
+func judgeReach(e *evidence.Evidence, node string) (rule.Finding, bool) {
+	worst, by, found := worstOf(StudyAll(e), func(f rule.Finding) bool { return f.Rule == "touch.voltage" && f.Subject == node })
+	if !found {
+		return rule.Finding{}, false
+	}
+	f := worst
+	f.Rule, f.Under, f.Because = "fault.touch", by.Name, by.Name+": "+worst.Because
+	f.Place = e.Chain().Access.Touchable.Place
+	if f.Verdict == rule.Meets || f.Verdict == rule.Unassessed {
+		return f.WithoutRemedyIfMet(), true
+	}
+	f.Remedy = by.Add
+	if f.Remedy == "" {
+		f.Remedy = "put it out of reach"
+	}
+	return held(e, node, by, f), true
+}
+
+// held looks for what keeps people from a node that the fault lifts.
+func held(e *evidence.Evidence, node string, by Outcome, f rule.Finding) rule.Finding {
+	bond, cable := e.Chain().Access.EarthBond, e.Chain().Cable
+	if m, caught := by.Caught(); caught {
+		f.Because += fmt.Sprintf("; the %s switches off: %s", m.Name, m.Because)
+		return present(f).Assume("the " + m.Name + " acts before anybody is hurt")
+	}
+	switch {
+	case node == circuit.Chassis && (bond == nil || !bond.Count.Set()):
+		return f.Lacking(lack.Key("access.earth_bond.count"))
+	case node == circuit.Chassis && bond.Count.V > 1:
+		f.Because += "; a second bond holds it"
+		return present(f)
+	case node == "cable.screen" && cable.ScreenEarths.V > 1:
+		f.Because += "; the other end of the screen holds it"
+		return present(f)
+	case node == "cable.screen" && !cable.ScreenEarths.Set():
+		f.Because += "; " + cable.ScreenEarths.Key + " is not given"
+		return present(f).Assume("the screen of the cable is earthed at both ends")
+	}
+	return f
+}
+
+// present turns a finding of amounts into one of presence: something holds.
+func present(f rule.Finding) rule.Finding {
+	f.Needed, f.Provided, f.Margin = nil, nil, nil
+	return f.There(true)
+}

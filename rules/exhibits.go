@@ -9,7 +9,7 @@ import (
 // where there is nothing to show.
 func curves(e *evidence.Evidence) []exhibit.Curve {
 	return gather(e,
-		fieldPictures,
+		unless("fields", fieldPictures),
 		surfaceCurves,
 		waveforms,
 		nodeWaveforms,
@@ -24,7 +24,7 @@ func curves(e *evidence.Evidence) []exhibit.Curve {
 // tables lists every table of a review in the order of print.
 func tables(e *evidence.Evidence) []exhibit.Table {
 	return gather(e,
-		fieldTables,
+		unless("fields", fieldTables),
 		answerTables,
 		cutoffTable,
 		closedForm,
@@ -46,7 +46,18 @@ func tables(e *evidence.Evidence) []exhibit.Table {
 		layersTable,
 		sphereGaps,
 		pumpDown,
+		unless("faults", faultTable),
 	)
+}
+
+// unless is a maker that gives nothing where its family of rules is left out.
+func unless[T any](family string, maker func(*evidence.Evidence) []T) func(*evidence.Evidence) []T {
+	return func(e *evidence.Evidence) []T {
+		if e.Leaves(family) {
+			return nil
+		}
+		return maker(e)
+	}
 }
 
 // gather runs the makers in order.

@@ -31,7 +31,9 @@ func figures(e *evidence.Evidence) []figure.Figure {
 		once(c, e)
 	}
 	spacings(c, e)
-	computedFields(c, e)
+	if !e.Leaves("fields") {
+		computedFields(c, e)
+	}
 	return c.list
 }
 

@@ -8,24 +8,15 @@ import (
 	"kilovet/hv/trace"
 	"kilovet/rules/diagram"
 	"kilovet/rules/evidence"
-	"kilovet/rules/fault"
-	"kilovet/rules/fields"
 	"kilovet/rules/local"
-	"kilovet/rules/optics"
-	"kilovet/rules/parts"
-	"kilovet/rules/people"
-	"kilovet/rules/radiation"
 	"kilovet/rules/rule"
-	"kilovet/rules/spacing"
-	"kilovet/rules/supply"
-	"kilovet/rules/vessel"
 )
 
 // All lists every rule, in the order in which findings are given.
 func All() []rule.Rule {
 	var all []rule.Rule
-	for _, family := range [][]rule.Rule{people.Rules(), radiation.Rules(), spacing.Rules(), fields.Rules(), vessel.Rules(), parts.Rules(), supply.Rules(), optics.Rules(), fault.Rules()} {
-		all = append(all, family...)
+	for _, f := range families() {
+		all = append(all, f.rules...)
 	}
 	return all
 }
@@ -37,23 +28,25 @@ func Run(c *chain.Chain, inputs []Input, program Program) *Review {
 	return r
 }
 
-// Beside is what was read beside a description; what is nil was not.
+// Beside is what was read beside a description, and what was asked; what is nil was not.
 type Beside struct {
 	Limits *local.File
 	// Ripple is the record that beam.measured_ripple names.
 	Ripple *trace.Trace
+
+	Without []string // families of rules to leave out, of Families
+	// Progress is told how far lengthy work has come; never by two at once.
+	Progress func(what string, done, of int)
 }
 
 // RunUnder is Run with what was read beside the description. The faults are those of
 // the file of local limits that only show against this chain; there is no review then.
 func RunUnder(c *chain.Chain, inputs []Input, program Program, beside Beside) (*Review, document.Faults) {
-	e := evidence.New(c).Recorded(beside.Ripple)
+	e := evidence.New(c).Recorded(beside.Ripple).Without(beside.Without...).Telling(beside.Progress)
 	r := &Review{Program: program, Inputs: inputs, Heading: heading(c), Deference: deference}
-	for _, rl := range All() {
-		j := rl.Judge(e)
-		r.Findings = append(r.Findings, j.Findings...)
-		if j.PassedOver != "" {
-			r.PassedOver = append(r.PassedOver, rule.PassedOver{Rule: rl.ID, Because: j.PassedOver})
+	for _, f := range families() {
+		for _, rl := range f.rules {
+			r.take(rl, judged(e, f, rl))
 		}
 	}
 	if faults := r.under(beside.Limits); len(faults) > 0 {
@@ -68,6 +61,21 @@ func RunUnder(c *chain.Chain, inputs []Input, program Program, beside Beside) (*
 	r.Verdict = rule.Worst(r.Findings)
 	r.Counts = counts(r.Findings)
 	return r, nil
+}
+
+// judged is what a rule says, or that its family is left out.
+func judged(e *evidence.Evidence, f family, r rule.Rule) rule.Judgement {
+	if e.Leaves(f.name) {
+		return rule.Over(omitted)
+	}
+	return r.Judge(e)
+}
+
+func (r *Review) take(rl rule.Rule, j rule.Judgement) {
+	r.Findings = append(r.Findings, j.Findings...)
+	if j.PassedOver != "" {
+		r.PassedOver = append(r.PassedOver, rule.PassedOver{Rule: rl.ID, Because: j.PassedOver})
+	}
 }
 
 func counts(findings []rule.Finding) map[rule.Verdict]int {

@@ -20,6 +20,7 @@ func main() {
 	os.Exit(run(world{
 		args: os.Args[1:], in: os.Stdin, out: os.Stdout, err: os.Stderr, env: os.Getenv,
 		columns: func() int { return columns(os.Stdout) }, piped: piped(os.Stdin),
+		watched: term.IsTerminal(int(os.Stderr.Fd())),
 	}))
 }
 
@@ -31,6 +32,7 @@ type world struct {
 	env      func(string) string
 	columns  func() int // of the terminal that out is; 0 where it is none
 	piped    bool       // something was led into in: a pipe or a file
+	watched  bool       // err is a terminal
 }
 
 func piped(in *os.File) bool {

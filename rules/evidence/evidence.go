@@ -1,6 +1,7 @@
 package evidence
 
 import (
+	"slices"
 	"sync"
 
 	"kilovet/hv/chain"
@@ -17,11 +18,42 @@ type Evidence struct {
 	memory    *memory
 	trace     *trace.Trace // of the measured ripple; nil where none was read
 	before    *Evidence    // of the chain before it was changed, to start from; nil for the described one
+	request   *request
+}
+
+// request is what a review was asked for beside the chain.
+type request struct {
+	without []string
+	told    func(what string, done, of int)
+}
+
+// Without leaves families of rules out, with what they alone would compute.
+func (e *Evidence) Without(families ...string) *Evidence {
+	e.request.without = families
+	return e
+}
+
+// Leaves reports whether a family of rules is left out.
+func (e *Evidence) Leaves(family string) bool {
+	return e.request != nil && slices.Contains(e.request.without, family)
+}
+
+// Telling has somebody told how far lengthy work has come; never by two at once.
+func (e *Evidence) Telling(told func(what string, done, of int)) *Evidence {
+	e.request.told = told
+	return e
+}
+
+// Tell says how far lengthy work has come.
+func (e *Evidence) Tell(what string, done, of int) {
+	if e.request != nil && e.request.told != nil {
+		e.request.told(what, done, of)
+	}
 }
 
 // New starts the evidence for a chain in working state, with an empty memory.
 func New(c *chain.Chain) *Evidence {
-	return &Evidence{chain: c, condition: Condition{State: Working}, memory: &memory{known: map[memoryKey]any{}}}
+	return &Evidence{chain: c, condition: Condition{State: Working}, memory: &memory{known: map[memoryKey]any{}}, request: &request{}}
 }
 
 // Under is the evidence for the same chain under another condition.

@@ -25,8 +25,15 @@ var computed = rule.Rule{
 	Concern: rule.Equipment,
 	Sources: []rule.Source{faultSource},
 	Example: rule.Example{
-		Swaps:   []rule.Swap{{Was: `cutoff              = "420 V"`, Becomes: ""}},
-		Changes: []rule.Change{{Rule: "fault.computed", Subject: "chain"}},
+		Swaps: []rule.Swap{{Was: `cutoff              = "420 V"`, Becomes: ""}},
+		Changes: []rule.Change{
+			{Rule: "fault.computed", Subject: "chain"},
+			{Rule: "fault.computed", Subject: "bias.resistor open", Verdict: rule.Unassessed},
+			{Rule: "fault.computed", Subject: "bias.resistor shorted", Verdict: rule.Unassessed},
+			{Rule: "fault.computed", Subject: "bias.bypass shorted", Verdict: rule.Unassessed},
+			{Rule: "fault.computed", Subject: "bias.clamp shorted", Verdict: rule.Unassessed},
+			{Rule: "gun.emission_law", Subject: "gun"},
+		},
 	},
 	Judge: judgeComputed,
 }
@@ -61,8 +68,15 @@ var ratings = rule.Rule{
 	Concern: rule.Equipment,
 	Sources: []rule.Source{limits.FaultSource, faultSource},
 	Example: rule.Example{
-		Swaps:   []rule.Swap{{Was: `over_current = { trip = "200 uA", acts_on = "drive supply" }`, Becomes: ""}},
-		Changes: []rule.Change{{Rule: "fault.rating", Subject: "arc", Verdict: rule.Marginal}},
+		Swaps: []rule.Swap{{Was: `over_current = { trip = "200 uA", acts_on = "drive supply" }`, Becomes: ""}},
+		Changes: []rule.Change{
+			{Rule: "fault.rating", Subject: "arc", Verdict: rule.Marginal},
+			{Rule: "fault.rating", Subject: "cable shorted", Verdict: rule.Marginal},
+			{Rule: "fault.rating", Subject: "bleeder shorted", Verdict: rule.Marginal},
+			{Rule: "fault.rating", Subject: "filter capacitor shorted", Verdict: rule.Marginal},
+			{Rule: "fault.rating", Subject: "heater feed breakdown", Verdict: rule.Marginal},
+			{Rule: "protection.over_current", Subject: "chain"},
+		},
 	},
 	Judge: func(e *evidence.Evidence) rule.Judgement {
 		if !e.HasSupply() {

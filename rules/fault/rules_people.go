@@ -20,7 +20,7 @@ var gaps = rule.Rule{
 	Concern: rule.Life,
 	Sources: []rule.Source{faultSource},
 	Example: rule.Example{
-		Swaps:   []rule.Swap{{Was: "name       = \"stages 1 to 3\"\nfrom       = \"stage.1\"\nto         = \"stage.2\"\nalso       = [\"stage.3\"]\nmedium     = \"air\"\ninsulation = \"functional\"\nclearance  = \"18 mm\"", Becomes: "name       = \"stages 1 to 3\"\nfrom       = \"stage.1\"\nto         = \"stage.2\"\nalso       = [\"stage.3\"]\nmedium     = \"air\"\ninsulation = \"functional\"\nclearance  = \"60 mm\""}},
+		Swaps:   []rule.Swap{{Was: "name       = \"stages 1 to 3\"\nfrom       = \"stage.1\"\nto         = \"stage.2\"\nalso       = [\"stage.3\"]\nmedium     = \"air\"\ninsulation = \"functional\"\nclearance  = \"18 mm\"", Becomes: "name       = \"stages 1 to 3\"\nfrom       = \"stage.1\"\nto         = \"stage.2\"\nalso       = [\"stage.3\"]\nmedium     = \"air\"\ninsulation = \"functional\"\nclearance  = \"70 mm\""}},
 		Changes: []rule.Change{{Rule: "fault.spacing", Subject: "stages 1 to 3", Verdict: rule.Meets}},
 	},
 	Judge: func(e *evidence.Evidence) rule.Judgement {
@@ -79,7 +79,8 @@ func touches(e *evidence.Evidence, s *chain.Spacing) bool {
 	if a := e.Chain().Access; a != nil {
 		all = a.Touchable.V
 	}
-	return slices.Contains(all, s.To.V) || slices.Contains(all, s.From.V) || s.To.V == "mains" || s.From.V == "mains"
+	all = append(slices.Clone(all), "mains")
+	return slices.ContainsFunc(append([]string{s.From.V, s.To.V}, s.Also.V...), func(node string) bool { return slices.Contains(all, node) })
 }
 
 // worstOf finds the finding of a sort that uses most of what is allowed; one without an
@@ -125,8 +126,11 @@ var reached = rule.Rule{
 	Concern: rule.Life,
 	Sources: []rule.Source{limits.TouchFaultSource, limits.FaultCurrentSource, limits.TouchChargeSource, limits.TouchEnergySource},
 	Example: rule.Example{
-		Swaps:   []rule.Swap{{Was: `clamp  = { voltage = "90 V", kind = "gas tube", leakage = "1 nA" }`, Becomes: `clamp  = { voltage = "90 V", kind = "gas tube", leakage = "1 nA" }`}},
-		Changes: []rule.Change{{Rule: "fault.touch", Subject: "divider.tap", Verdict: rule.Meets}},
+		Swaps: []rule.Swap{{Was: `touchable       = ["divider.tap"]`, Becomes: `touchable       = ["divider.tap", "cathode"]`}},
+		Changes: []rule.Change{
+			{Rule: "fault.touch", Subject: "cathode", Verdict: rule.Fails},
+			{Rule: "touch.voltage", Subject: "cathode", Verdict: rule.Fails},
+		},
 	},
 	Judge: func(e *evidence.Evidence) rule.Judgement {
 		if !e.HasSupply() {

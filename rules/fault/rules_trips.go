@@ -20,8 +20,8 @@ var overVoltageTrip = rule.Rule{
 	Concern: rule.Equipment,
 	Sources: []rule.Source{limits.TripSource},
 	Example: rule.Example{
-		Swaps:   []rule.Swap{{Was: `over_voltage = { trip = "23 kV"`, Becomes: `over_voltage = { trip = "19 kV"`}},
-		Changes: []rule.Change{{Rule: "protection.over_voltage", Subject: "chain", Verdict: rule.Fails}},
+		Swaps:   []rule.Swap{{Was: `senses = "second divider"`, Becomes: `senses = "the main divider"`}},
+		Changes: []rule.Change{{Rule: "protection.over_voltage", Subject: "chain", Verdict: rule.Marginal}},
 	},
 	Judge: func(e *evidence.Evidence) rule.Judgement {
 		p := e.Chain().Protection
@@ -95,8 +95,8 @@ func between[Q quantity.Number](e *evidence.Evidence, f rule.Finding, set, most 
 	return f.Least(rule.Of(set), rule.Of(most), limits.TripMargin).WithoutRemedyIfMet()
 }
 
-// borne is the value of what a trip senses at which the first part reaches its usual
-// share, in proportion from the state with regulation lost; 0 where nothing is rated.
+// borne is the value of what a trip senses at which the first part reaches its rating, in
+// proportion from the state with regulation lost; 0 where nothing is rated.
 func borne[Q quantity.Number](e *evidence.Evidence, seen func(*evidence.Evidence) (Q, error)) (Q, string, error) {
 	lost := e.Under(evidence.Condition{State: evidence.Lost})
 	at, err := seen(lost)
@@ -105,10 +105,10 @@ func borne[Q quantity.Number](e *evidence.Evidence, seen func(*evidence.Evidence
 	}
 	least, part := Q(0), ""
 	for _, f := range parts.Lasting(lost) {
-		if f.Margin == nil {
+		if f.Provided == nil || f.Whole == nil || f.Provided.Value <= 0 {
 			continue
 		}
-		if b := at * Q(1+*f.Margin); least == 0 || b < least {
+		if b := at * Q(f.Whole.Value/f.Provided.Value); least == 0 || b < least {
 			least, part = b, f.Subject
 		}
 	}
@@ -123,8 +123,11 @@ var overCurrentTrip = rule.Rule{
 	Concern: rule.Equipment,
 	Sources: []rule.Source{limits.TripSource},
 	Example: rule.Example{
-		Swaps:   []rule.Swap{{Was: `over_current = { trip = "200 uA"`, Becomes: `over_current = { trip = "20 uA"`}},
-		Changes: []rule.Change{{Rule: "protection.over_current", Subject: "chain", Verdict: rule.Fails}},
+		Swaps: []rule.Swap{{Was: `over_current = { trip = "200 uA"`, Becomes: `over_current = { trip = "50 uA"`}},
+		Changes: []rule.Change{
+			{Rule: "fault.rating", Subject: "divider element off by ten", Verdict: rule.Meets},
+			{Rule: "protection.over_current", Subject: "chain", Verdict: rule.Fails},
+		},
 	},
 	Judge: func(e *evidence.Evidence) rule.Judgement {
 		p := e.Chain().Protection

@@ -115,23 +115,33 @@ const workers = 4
 func StudyAll(e *evidence.Evidence) []Outcome {
 	all, _ := evidence.Remember(e.Under(evidence.Condition{}), "faults", func() ([]Outcome, error) {
 		_, _ = e.Under(evidence.Condition{State: evidence.Working}).Network() // all begin from there
-		list := Of(e)
-		outcomes := make([]Outcome, len(list))
-		next := make(chan int)
-		var group sync.WaitGroup
-		for range workers {
-			group.Go(func() {
-				for i := range next {
-					outcomes[i] = Study(e, list[i])
-				}
-			})
-		}
-		for i := range list {
-			next <- i
-		}
-		close(next)
-		group.Wait()
-		return outcomes, nil
+		return study(e, Of(e)), nil
 	})
 	return all
+}
+
+// study computes a list of faults, several at once; results stand in the order of the list.
+func study(e *evidence.Evidence, list []Fault) []Outcome {
+	outcomes := make([]Outcome, len(list))
+	next := make(chan int)
+	var group sync.WaitGroup
+	var telling sync.Mutex
+	done := 0
+	for range workers {
+		group.Go(func() {
+			for i := range next {
+				outcomes[i] = Study(e, list[i])
+				telling.Lock()
+				done++
+				e.Tell("single faults", done, len(list))
+				telling.Unlock()
+			}
+		})
+	}
+	for i := range list {
+		next <- i
+	}
+	close(next)
+	group.Wait()
+	return outcomes
 }

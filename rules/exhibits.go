@@ -46,6 +46,8 @@ func tables(e *evidence.Evidence) []exhibit.Table {
 		layersTable,
 		sphereGaps,
 		pumpDown,
+		energyTables,
+		radiationTable,
 		unless("faults", faultTable),
 	)
 }

@@ -24,3 +24,11 @@ func VoltageOf(c quantity.Capacitance, e quantity.Energy) (quantity.Voltage, err
 	}
 	return quantity.Voltage(math.Sqrt(2 * float64(e) / float64(c))), nil
 }
+
+// CapacitanceOf is the capacitance that holds a charge at a voltage; a lack at no voltage.
+func CapacitanceOf(q quantity.Charge, u quantity.Voltage) (quantity.Capacitance, error) {
+	if !positive(u) || !notNegative(q) {
+		return 0, lack.Range("no capacitance belongs to %s at %s", quantity.Text(q), quantity.Text(u))
+	}
+	return quantity.Capacitance(float64(q) / float64(u)), nil
+}

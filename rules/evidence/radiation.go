@@ -22,8 +22,22 @@ func (e *Evidence) Accelerating() (Extreme[quantity.Voltage], error) {
 	return Worst(e, []string{node}, func(e *Evidence, n string) (quantity.Voltage, error) { return e.Between(n, "ground") })
 }
 
+// AcceleratingIn is that voltage in one state, all parts nominal.
+func (e *Evidence) AcceleratingIn(s State) (quantity.Voltage, error) {
+	node := "output"
+	if e.chain.HasCathode() {
+		node = "cathode"
+	}
+	return e.Under(Condition{State: s}).Between(node, "ground")
+}
+
 // Radiation is the air kerma rate 0.1 m outside a shield, at a voltage.
 func (e *Evidence) Radiation(s *chain.Shield, u quantity.Voltage) (xray.Estimate, error) {
+	return e.RadiationAt(s, u, surveyDistance)
+}
+
+// RadiationAt is the air kerma rate at a distance from the outer surface of a shield.
+func (e *Evidence) RadiationAt(s *chain.Shield, u quantity.Voltage, from quantity.Length) (xray.Estimate, error) {
 	i := slices.IndexFunc(e.chain.Targets, func(t chain.Target) bool { return t.Name.V == s.Target.V })
 	if i < 0 {
 		return xray.Estimate{}, lack.Key("target")
@@ -37,7 +51,7 @@ func (e *Evidence) Radiation(s *chain.Shield, u quantity.Voltage) (xray.Estimate
 	if err != nil {
 		return xray.Estimate{}, err
 	}
-	wall := xray.Wall{Distance: distance + surveyDistance}
+	wall := xray.Wall{Distance: distance + from}
 	for _, l := range s.Layers {
 		m, err := xray.FindMaterial(l.Material.V)
 		if err != nil {

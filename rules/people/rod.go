@@ -5,6 +5,7 @@ import (
 
 	"kilovet/hv/lack"
 	"kilovet/hv/quantity"
+	body "kilovet/hv/touch"
 	"kilovet/rules/evidence"
 	"kilovet/rules/limits"
 	"kilovet/rules/rule"
@@ -156,11 +157,13 @@ var rodVoltage = rule.Rule{
 	},
 }
 
+// peakCurrent says what a rod starts with at a voltage.
 func peakCurrent(v quantity.Voltage, r quantity.Resistance) string {
-	if r == 0 {
+	i, err := body.Current(v, r, 0)
+	if err != nil {
 		return "no limit to the current"
 	}
-	return quantity.Text(quantity.Current(float64(v) / float64(r)))
+	return quantity.Text(i)
 }
 
 var rodEnergy = rule.Rule{

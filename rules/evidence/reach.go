@@ -1,0 +1,138 @@
+package evidence
+
+import (
+	"strings"
+
+	"kilovet/hv/circuit"
+	"kilovet/hv/quantity"
+	"kilovet/hv/steady"
+	"kilovet/hv/touch"
+)
+
+// Reachable is what a node holds, for a person or a tool that reaches it.
+type Reachable struct {
+	Node    string
+	Voltage quantity.Voltage // largest magnitude to ground
+	Short   Short
+	// Capacitance is that which holds the charge at the voltage: what a rod meets.
+	Capacitance quantity.Capacitance
+}
+
+// Reachable is what a node holds under the condition.
+func (e *Evidence) Reachable(node string) (Reachable, error) {
+	v, err := e.Between(node, "ground")
+	if err != nil {
+		return Reachable{}, err
+	}
+	s, err := e.ShortAt(node)
+	if err != nil {
+		return Reachable{}, err
+	}
+	c, err := touch.CapacitanceOf(s.Charge, v)
+	return Reachable{node, v, s, c}, err
+}
+
+// Rod is what the described earthing rod goes through at a node: the peak by its voltage,
+// the energy by what a short there releases, both at most.
+func (e *Evidence) Rod(node string) (touch.Earthing, error) {
+	r, err := e.Reachable(node)
+	if err != nil {
+		return touch.Earthing{}, err
+	}
+	x, err := touch.Earth(r.Capacitance, r.Voltage, e.chain.Access.EarthingRod.Resistance.V)
+	x.Energy = r.Short.Energy
+	return x, err
+}
+
+// Shock is what a body would take at a node, as information.
+func (e *Evidence) Shock(node string, body touch.Body) (touch.Shock, error) {
+	r, err := e.Reachable(node)
+	if err != nil {
+		return touch.Shock{}, err
+	}
+	return touch.Through(r.Capacitance, r.Voltage, body.Resistance)
+}
+
+// Unplugged is the discharge of a node with the drive unplugged: the columns have no way
+// to ground through it.
+func (e *Evidence) Unplugged(node string) (Discharge, error) {
+	d, err := remember(e, "decay, drive unplugged", func() (*steady.Decay, error) {
+		c, err := e.Circuit()
+		if err != nil {
+			return nil, err
+		}
+		v, err := e.means()
+		if err != nil {
+			return nil, err
+		}
+		open := c
+		for _, l := range c.Links() {
+			if strings.HasPrefix(l, "drive lead") {
+				open = open.Open(l)
+			}
+		}
+		return steady.Discharge(open, v.Carry(c, open), discharged)
+	})
+	if err != nil {
+		return Discharge{}, err
+	}
+	x, err := d.Node(node)
+	return discharge(x), err
+}
+
+// MeterAfter is what the meter shows in the end, as the voltage of the sensed node, with a
+// part open after switching off.
+func (e *Evidence) MeterAfter(part string) (quantity.Voltage, error) {
+	c, err := e.Circuit()
+	if err != nil {
+		return 0, err
+	}
+	v, err := e.means()
+	if err != nil {
+		return 0, err
+	}
+	d, err := steady.Discharge(c.OpenString(part), v, discharged)
+	if err != nil {
+		return 0, err
+	}
+	x, err := d.Node("divider.tap")
+	if err != nil {
+		return 0, err
+	}
+	div, err := e.Divider()
+	if err != nil {
+		return 0, err
+	}
+	ratio, err := div.Ratio()
+	return magnitude(x.Rest) * quantity.Voltage(ratio), err
+}
+
+// Comeback is what dielectric absorption brings back on a capacitor.
+type Comeback struct {
+	Part       string
+	Voltage    quantity.Voltage // before
+	Absorption touch.Absorption
+	Back       touch.Recharged
+	Err        error // where nothing is published of its dielectric
+}
+
+// Comebacks are those of every capacitor given as a part, by the largest voltage on it.
+func (e *Evidence) Comebacks() ([]Comeback, error) {
+	var all []Comeback
+	for _, el := range e.Layout().Elements {
+		if el.Kind != circuit.Capacitor || el.CapacitorPart == nil {
+			continue
+		}
+		v, err := e.ElementPeak(el.Name)
+		if err != nil {
+			return nil, err
+		}
+		b := Comeback{Part: el.Name, Voltage: v}
+		b.Absorption, b.Err = touch.FindAbsorption(el.CapacitorPart.Dielectric.V)
+		if b.Err == nil {
+			b.Back, b.Err = b.Absorption.Recharge(el.Capacitance, v)
+		}
+		all = append(all, b)
+	}
+	return all, nil
+}

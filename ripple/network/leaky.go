@@ -17,9 +17,12 @@ var leakages = []float64{2e-2, 1e-2, 2e-3, 1e-3, 4e-4, 1e-4, 2e-5}
 // the cut.
 const cut = 2
 
-// agreed is the part of the largest voltage by which a state may differ from that without
-// the leakage lent.
-const agreed = 0.02
+// agreedWhole and agreedCut are the parts of the largest voltage by which a state may
+// differ from that without the leakage lent: in a whole ladder, and in one that is cut.
+const (
+	agreedWhole = 0.002
+	agreedCut   = 0.02
+)
 
 // reacher finds the steady state of a circuit in which something has failed.
 type reacher struct {
@@ -51,9 +54,9 @@ func (r reacher) lend(c *circuit.Circuit, o Options) *Periodic {
 	unit := leakUnit(c, o)
 	var last *Periodic
 	before := 0.0
-	parts := leakages
+	parts, agreed := leakages, agreedWhole
 	if r.dead {
-		parts = parts[cut:]
+		parts, agreed = parts[cut:], agreedCut
 	}
 	for _, part := range parts {
 		next, err := Steady(r.leaking(c, part*unit), Options{Frequency: o.Frequency})

@@ -21,8 +21,8 @@ func tableOf(t *testing.T, r *rules.Review, id string) exhibit.Table {
 	return exhibit.Table{}
 }
 
-// rowOf finds the row that begins with a name.
-func rowOf(t *testing.T, x exhibit.Table, name string) []exhibit.Cell {
+// lineOf finds the row that begins with a name.
+func lineOf(t *testing.T, x exhibit.Table, name string) []exhibit.Cell {
 	t.Helper()
 	for _, row := range x.Rows {
 		if row[0].Text == name {
@@ -45,16 +45,16 @@ permanent = true
 touchable = ["output"]
 earthing_rod = { resistance = "100 kohm" }
 `))
-	node := rowOf(t, tableOf(t, r, "energy.nodes"), "stage.1")
+	node := lineOf(t, tableOf(t, r, "energy.nodes"), "stage.1")
 	within(t, "voltage", *node[1].Value, 5000, 2e-3)
 	// Below 2.5 kV the diode lets the coupling capacitor follow.
 	within(t, "charge", *node[2].Value, 10e-9*5000+10e-9*2500, 1e-2)
 	within(t, "energy", *node[3].Value, 10e-9*(5000*5000+2500*2500)/2, 1e-2)
 	within(t, "time", *node[5].Value, 1e9*10e-9*math.Log(2)+1e9*20e-9*math.Log(2500/60.), 1e-2)
-	rod := rowOf(t, tableOf(t, r, "energy.rod"), "stage.1")
+	rod := lineOf(t, tableOf(t, r, "energy.rod"), "stage.1")
 	within(t, "peak", *rod[2].Value, 5000/100e3, 2e-3)
 	within(t, "rod time", *rod[4].Value, 100e3*15e-9*math.Log(5000/60.), 1e-2)
-	back := rowOf(t, tableOf(t, r, "energy.recharge"), "multiplier.smoothing_capacitor.1")
+	back := lineOf(t, tableOf(t, r, "energy.recharge"), "multiplier.smoothing_capacitor.1")
 	within(t, "back", *back[3].Value, 0.006*5000, 2e-3)
 }
 

@@ -33,6 +33,7 @@ var computed = rule.Rule{
 			{Rule: "fault.computed", Subject: "bias.bypass shorted", Verdict: rule.Unassessed},
 			{Rule: "fault.computed", Subject: "bias.clamp shorted", Verdict: rule.Unassessed},
 			{Rule: "gun.emission_law", Subject: "gun"},
+			{Rule: "gun.regulation", Subject: "gun"},
 		},
 	},
 	Judge: judgeComputed,

@@ -55,7 +55,7 @@ var hum = rule.Rule{
 	Example: rule.Example{
 		Swaps: []rule.Swap{{Was: `screen = true, common_mode`, Becomes: `screen = false, common_mode`}, {Was: `dwell                = "1 ms"`, Becomes: `dwell                = "1 ms"
 field_width          = "1 mm"`}},
-		Changes: []rule.Change{{Rule: "beam.hum", Subject: "hum", Verdict: rule.Fails}, {Rule: "beam.disturbance", Subject: "cathode", Verdict: rule.Fails}, {Rule: "beam.blur", Subject: "beam", Verdict: rule.Fails}},
+		Changes: []rule.Change{{Rule: "beam.hum", Subject: "hum", Verdict: rule.Fails}, {Rule: "beam.disturbance", Subject: "cathode", Verdict: rule.Fails}, {Rule: "beam.blur", Subject: "beam", Verdict: rule.Fails}, {Rule: "heater.hum", Subject: "cathode", Verdict: rule.Fails}},
 	},
 	Judge: func(e *evidence.Evidence) rule.Judgement {
 		b := e.Chain().Beam

@@ -20,7 +20,7 @@ var heaterBalance = rule.Rule{
 	Sources: []rule.Source{balanceSource},
 	Example: rule.Example{
 		Swaps:   []rule.Swap{{Was: `supply  = "dc"`, Becomes: `supply  = "ac"`}, {Was: `["22 ohm", "22 ohm"]`, Becomes: `["22 ohm", "150 ohm"]`}, {Was: `blur_allowance       = "12 nm"`, Becomes: `blur_allowance       = "4.72 nm"`}},
-		Changes: []rule.Change{{Rule: "heater.balance", Subject: "heater", Verdict: rule.Fails}, {Rule: "beam.blur", Subject: "beam", Verdict: rule.Fails}, {Rule: "beam.disturbance", Subject: "cathode", Verdict: rule.Fails}},
+		Changes: []rule.Change{{Rule: "heater.balance", Subject: "heater", Verdict: rule.Fails}, {Rule: "beam.blur", Subject: "beam", Verdict: rule.Fails}, {Rule: "beam.disturbance", Subject: "cathode", Verdict: rule.Fails}, {Rule: "heater.hum", Subject: "cathode", Verdict: rule.Marginal}},
 	},
 	Judge: func(e *evidence.Evidence) rule.Judgement {
 		h, b := e.Chain().Heater, e.Chain().Beam

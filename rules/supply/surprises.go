@@ -132,6 +132,8 @@ var humShare = rule.Rule{
 		Swaps: []rule.Swap{{Was: `capacitance = "45 pF", screen = true`, Becomes: `capacitance = "45 pF", screen = false`}},
 		Changes: []rule.Change{
 			{Rule: "heater.hum", Subject: "cathode", Verdict: rule.Fails},
+			{Rule: "beam.disturbance", Subject: "cathode", Verdict: rule.Fails},
+			{Rule: "beam.hum", Subject: "hum", Verdict: rule.Fails},
 			{Rule: "beam.blur", Subject: "beam", Verdict: rule.Fails},
 		},
 	},

@@ -53,8 +53,18 @@ func attempts() []attempt {
 	return []attempt{{0, 2, false}, {0, 0, true}, {0.05, 6, false}, {0.5, 10, false}, {5, 100, false}}
 }
 
-// solve searches in one way after the other.
+// solve searches briskly, and with care where that does not get there.
 func (s *shooter) solve(from *Periodic) (*Periodic, error) {
+	p, err := s.search(from)
+	if err == nil {
+		return p, nil
+	}
+	s.pace.care = careful
+	return s.search(from)
+}
+
+// search searches in one way after the other.
+func (s *shooter) search(from *Periodic) (*Periodic, error) {
 	h := newSearch(s)
 	var err error
 	for _, a := range attempts() {

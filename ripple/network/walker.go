@@ -32,6 +32,7 @@ type walker struct {
 	poleR   float64    // and at the real one
 	smooth  bool       // events are located as well as the arithmetic allows
 	slack   []float64  // by diode: the excess that does not count
+	care    float64    // the part of the mean current that it makes
 	work    Work
 }
 
@@ -40,7 +41,7 @@ func newWalker(s *system) *walker {
 	w.q, w.u, w.steady, w.held = make([]float64, s.n), make([]float64, s.n), make([]float64, s.n), make([]float64, s.n)
 	w.swing = make([]float64, s.n)
 	w.amps, w.on = make([]float64, len(s.inductors)), make([]bool, len(s.diodes))
-	w.matrix, w.slack = make([]float64, s.pattern.size()), make([]float64, len(s.diodes))
+	w.matrix, w.slack, w.care = make([]float64, s.pattern.size()), make([]float64, len(s.diodes)), brisk
 	w.factor, w.lanes = make([]trio, s.pattern.size()), make([]trio, s.n)
 	for j := range w.stage {
 		w.stage[j], w.branch[j] = make([]float64, s.n), make([]float64, len(s.inductors))
@@ -264,14 +265,21 @@ func (y *samples) farBelow(level float64) bool {
 	return high+(high-low) < level
 }
 
-// tolerate sets the excess of the diodes that does not count: what makes a part of
-// 1e-4 of the mean current, or what the arithmetic leaves.
+// How much of the mean current the excess makes that does not count: careful where an
+// unloaded ladder beside a loaded part is not found otherwise.
+const (
+	brisk   = 1e-3
+	careful = 1e-4
+)
+
+// tolerate sets the excess of the diodes that does not count: what makes a small part of
+// the mean current, or what the arithmetic leaves.
 func (w *walker) tolerate(current float64) {
 	least := 1e-12 * w.scale
 	if w.grain > finest*w.period {
 		least = 1e-10 * w.scale
 	}
 	for i := range w.diodes {
-		w.slack[i] = math.Max(1e-3*current/w.diodes[i].on, least)
+		w.slack[i] = math.Max(w.care*current/w.diodes[i].on, least)
 	}
 }

@@ -62,9 +62,7 @@ func TestTheSheetHoldsWhatPeopleSign(t *testing.T) {
 	for _, c := range r.Cautions {
 		wants = append(wants, c.Text)
 	}
-	for _, a := range r.Assumptions {
-		wants = append(wants, a)
-	}
+	wants = append(wants, r.Assumptions...)
 	for _, want := range wants {
 		if !strings.Contains(text, want) {
 			t.Errorf("%q is not on the sheet", want)

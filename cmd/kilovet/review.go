@@ -70,7 +70,7 @@ const reviewExamples = `  kilovet review chain.toml                    one scree
   kilovet review --html page.html chain.toml   one page for the browser
   kilovet review --json - chain.toml           results for other programs
   kilovet review --local house.toml chain.toml under a stricter local code
-  kilovet review --without faults chain.toml   quicker; never sound: exit status 1
+  kilovet review --without faults chain.toml   quicker; exit status 1
   kilovet review -                             a description on standard input
   kilovet review                               the built-in example`
 

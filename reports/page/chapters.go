@@ -143,6 +143,10 @@ func (n *writer) reasons(c digest.Chapter, f rule.Finding) Cell {
 	return lines(append(all, n.sourceLine(f), n.seenLine(c, f))...)
 }
 
+// longTable is how many rows of a table stand on the sheets; tables put first what
+// matters most.
+const longTable = 48
+
 // tables is the tables of a chapter.
 func (n *writer) tables(c digest.Chapter) []Block {
 	var all []Block
@@ -153,7 +157,11 @@ func (n *writer) tables(c digest.Chapter) []Block {
 			title += ", " + t.Subject
 		}
 		out := Table{Title: title, Note: tableNote(t), Anchor: to, Columns: columns(t)}
-		for _, row := range t.Rows {
+		rows, rest := t.Rows, 0
+		if len(rows) > longTable {
+			rows, rest = rows[:longTable], len(rows)-longTable
+		}
+		for _, row := range rows {
 			var cells []Cell
 			for i, cell := range row {
 				cells = append(cells, lines(plain(digest.Cell(t.Columns[i].Unit, cell.Value, cell.Text))))
@@ -161,6 +169,9 @@ func (n *writer) tables(c digest.Chapter) []Block {
 			out.Rows = append(out.Rows, Row{Cells: cells})
 		}
 		all = append(all, out)
+		if rest > 0 {
+			all = append(all, Paragraph{fmt.Sprintf("%d more rows of %s are in the JSON results and with --all.", rest, n.labels[to])})
+		}
 	}
 	return all
 }

@@ -16,7 +16,7 @@ type want struct{ least, whole int }
 // Sizes of columns in runes.
 const (
 	longestWord = 16
-	longestText = 40
+	longestText = 60
 	lineRunes   = 88 // of a whole line of a sheet
 )
 
@@ -32,7 +32,10 @@ func columns(t exhibit.Table) []Column {
 	var all []Column
 	for i, c := range t.Columns {
 		share := float64(wants[i].whole) / float64(whole)
-		if spare := lineRunes - least; whole > lineRunes && spare > 0 {
+		switch spare := lineRunes - least; {
+		case whole > lineRunes && spare <= 0: // too many columns: none starves
+			share = float64(wants[i].least) / float64(least)
+		case whole > lineRunes:
 			share = (float64(wants[i].least) + float64(spare)*float64(wants[i].whole-wants[i].least)/float64(max(1, whole-least))) / lineRunes
 		}
 		all = append(all, Column{Title: c.Head, Share: share, Right: c.Unit != "" && !holdsWords(t, i)})

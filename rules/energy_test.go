@@ -78,7 +78,7 @@ func TestMeterShowsNothingOfWhatStays(t *testing.T) {
 
 // TestFaultsStandWorstFirst: what passes a limit and nothing catches stands before the rest.
 func TestFaultsStandWorstFirst(t *testing.T) {
-	x := tableOf(t, reviewed(t, described(t, "column")), "faults.outcomes")
+	x := tableOf(t, reviewedWhole(t, described(t, "column")), "faults.outcomes")
 	harmless := false
 	for _, row := range x.Rows {
 		uncaught := row[5].Text != "" && row[6].Text == ""

@@ -8,7 +8,7 @@ import (
 // to something.
 func TestExhibitsAreWhole(t *testing.T) {
 	for _, name := range []string{"column", "positive", "spacings", "faulty", "plate", "lead"} {
-		r := reviewed(t, described(t, name))
+		r := reviewedWhole(t, described(t, name))
 		seen := map[[2]string]bool{}
 		once := func(id, subject string) {
 			if seen[[2]string{id, subject}] {

@@ -33,17 +33,43 @@ func described(t *testing.T, name string) []byte {
 // reviews remembers what was reviewed: a review is plain data, and nobody changes it.
 var reviews sync.Map
 
+// reviewed is the review of a description without its single faults, which take longer
+// than all the rest.
 func reviewed(t *testing.T, data []byte) *rules.Review {
 	t.Helper()
-	if known, ok := reviews.Load(string(data)); ok {
+	ordinary(t)
+	return review(t, data, "faults")
+}
+
+// reviewedWhole is the whole review.
+func reviewedWhole(t *testing.T, data []byte) *rules.Review {
+	t.Helper()
+	ordinary(t)
+	return review(t, data)
+}
+
+// ordinary leaves whole reviews to the ordinary run.
+func ordinary(t *testing.T) {
+	if testing.Short() {
+		t.Skip("a whole review; the ordinary run has it")
+	}
+}
+
+func review(t *testing.T, data []byte, families ...string) *rules.Review {
+	t.Helper()
+	key := strings.Join(families, ",") + "\n" + string(data)
+	if known, ok := reviews.Load(key); ok {
 		return known.(*rules.Review)
 	}
 	c, faults := chain.Read(data)
 	if len(faults) > 0 {
 		t.Fatal(faults)
 	}
-	r := rules.Run(c, nil, rules.Program{Name: "kilovet"})
-	reviews.Store(string(data), r)
+	r, faults := rules.RunUnder(c, nil, rules.Program{Name: "kilovet"}, rules.Beside{Without: families})
+	if len(faults) > 0 {
+		t.Fatal(faults)
+	}
+	reviews.Store(key, r)
 	return r
 }
 
@@ -163,7 +189,7 @@ func changed(was, is map[string]rule.Verdict) map[string]rule.Verdict {
 
 func TestSoundChainsPass(t *testing.T) {
 	for _, name := range []string{"column", "positive", "spacings"} {
-		r := reviewed(t, described(t, name))
+		r := review(t, described(t, name))
 		for _, f := range r.Findings {
 			if f.Verdict == rule.Fails || f.Verdict == rule.Unassessed {
 				t.Errorf("%s: %s %s %s: %s", name, f.Verdict, f.Rule, f.Subject, f.Because)
@@ -181,7 +207,7 @@ func TestPlantedFaults(t *testing.T) {
 		t.Fatalf("%d faults are planted, at least twelve are wanted", len(want))
 	}
 	got := map[finding]bool{}
-	for _, f := range reviewed(t, data).Findings {
+	for _, f := range reviewedWhole(t, data).Findings {
 		if f.Verdict == rule.Fails || f.Verdict == rule.Unassessed {
 			got[finding{f.Place.Line, string(f.Verdict), f.Rule}] = true
 		}
@@ -213,7 +239,7 @@ func planted(text string) map[finding]bool {
 
 func TestNoFindingAndNoFigureTwice(t *testing.T) {
 	for _, name := range []string{"column", "positive", "spacings", "faulty"} {
-		r := reviewed(t, described(t, name))
+		r := reviewedWhole(t, described(t, name))
 		seen := map[string]bool{}
 		for _, f := range r.Findings {
 			key := f.Rule + "|" + f.Subject

@@ -2,6 +2,7 @@ package fault
 
 import (
 	"fmt"
+	"slices"
 	"strings"
 
 	"kilovet/rules/evidence"
@@ -56,9 +57,23 @@ func judgeComputed(e *evidence.Evidence) rule.Judgement {
 	}
 	if len(j.Findings) == 0 {
 		all.Because = fmt.Sprintf("%d single faults and errors of assembly were computed, each with the regulation's answer", len(outcomes))
-		j.Findings = []rule.Finding{all.There(true)}
+		all.Remedy = "take what a fault does to parts that it cuts off for an estimate"
+		j.Findings = []rule.Finding{all.There(true).Assume(taken(outcomes)...).WithoutRemedyIfMet()}
 	}
 	return j
+}
+
+// taken is what the outcomes rest on beyond the description, each once.
+func taken(all []Outcome) []string {
+	var texts []string
+	for _, o := range all {
+		for _, a := range o.Assumptions {
+			if !slices.Contains(texts, a) {
+				texts = append(texts, a)
+			}
+		}
+	}
+	return texts
 }
 
 var ratings = rule.Rule{

@@ -144,6 +144,13 @@ func TestAHealthyChainNamesNothing(t *testing.T) {
 	}
 }
 
+// ordinary leaves what solves hundreds of circuits to the ordinary run.
+func ordinary(t *testing.T) {
+	if testing.Short() {
+		t.Skip("hundreds of circuits; the ordinary run has them")
+	}
+}
+
 // conducting is a diode of the ladder that leaks.
 func conducting(name string, siemens float64) func(*circuit.Circuit) *circuit.Circuit {
 	return func(c *circuit.Circuit) *circuit.Circuit {
@@ -160,6 +167,7 @@ func resistance(name string, times float64) func(*circuit.Circuit) *circuit.Circ
 // Faults that the library does not hold exactly: the part itself is among the first
 // three suspects.
 func TestFaultsBetweenTheHypotheses(t *testing.T) {
+	ordinary(t)
 	cases := []struct {
 		part  string
 		wrong func(*circuit.Circuit) *circuit.Circuit
@@ -183,12 +191,10 @@ func TestFaultsBetweenTheHypotheses(t *testing.T) {
 // Every fault of the library that these readings can show is found again, or named as
 // not computed, and those are few.
 func TestFaultsOfTheLibrary(t *testing.T) {
+	ordinary(t)
 	w := newWorkbench(t)
 	shown, missed, open := 0, 0, 0
 	for i, f := range fault.Of(w.e) {
-		if testing.Short() && i%9 != 0 {
-			continue
-		}
 		change := f.Change()
 		if change.Edit == nil {
 			continue
@@ -245,6 +251,7 @@ func told(c *Comparison) string {
 // What is too little to show is not named: a diode with ten times its leakage, a
 // capacitor at 60 % change nothing that these instruments can tell from tolerances.
 func TestWhatDoesNotShowIsNotNamed(t *testing.T) {
+	ordinary(t)
 	w := newWorkbench(t)
 	for i, wrong := range []func(*circuit.Circuit) *circuit.Circuit{
 		conducting("multiplier.diode.4", 10*50e-9/8e3), capacitance("multiplier.smoothing_capacitor.3", 0.6), capacitance("multiplier.coupling_capacitor.1", 0.6),

@@ -26,6 +26,9 @@ func try(in string, columns int, env map[string]string, args ...string) (status 
 var gap string
 
 func TestColourNeedsATerminalThatWantsIt(t *testing.T) {
+	if testing.Short() {
+		t.Skip("whole reviews; the ordinary run has them")
+	}
 	for _, c := range []struct {
 		columns int
 		env     map[string]string
@@ -55,6 +58,9 @@ func (broken) Write([]byte) (int, error) { return 0, errors.New("no room") }
 func (broken) Read([]byte) (int, error)  { return 0, errors.New("no line") }
 
 func TestBrokenStreamsAreFileFaults(t *testing.T) {
+	if testing.Short() {
+		t.Skip("whole reviews; the ordinary run has them")
+	}
 	for _, args := range [][]string{{"review"}, {"basis"}, {"draft"}, {"review", "-"}} {
 		var errs bytes.Buffer
 		w := world{args: args, in: broken{}, out: broken{}, err: &errs, env: func(string) string { return "" }, columns: func() int { return 0 }}
@@ -65,6 +71,9 @@ func TestBrokenStreamsAreFileFaults(t *testing.T) {
 }
 
 func TestExitStatusDependsOnTheRequiredConcerns(t *testing.T) {
+	if testing.Short() {
+		t.Skip("whole reviews; the ordinary run has them")
+	}
 	review := func(v rule.Verdict, c rule.Concern) *rules.Review {
 		return &rules.Review{Findings: []rule.Finding{{Verdict: rule.Meets, Concern: rule.Life}, {Verdict: v, Concern: c}}}
 	}

@@ -162,6 +162,9 @@ func TestShowServesThisComputerAlone(t *testing.T) {
 
 // A record beside the description is followed too; a damaged one is shown as a fault.
 func TestShowFollowsTheMeasuredRipple(t *testing.T) {
+	if testing.Short() {
+		t.Skip("whole reviews; the ordinary run has them")
+	}
 	name, column := kilovet.Example()
 	text := strings.Replace(string(column), "exposure             =", "measured_ripple      = \"scope.csv\"\nexposure             =", 1)
 	if text == string(column) {

@@ -17,6 +17,7 @@ func gapIn(medium, more string) string {
 
 // Each caution stands where it concerns the chain, and not elsewhere.
 func TestCautionsConcernTheChain(t *testing.T) {
+	ordinary(t)
 	always := []string{"people"}
 	supplied := []string{"people", "stored charge", "earthing rod", "meters", "interlocks", "ozone"}
 	for _, c := range []struct {

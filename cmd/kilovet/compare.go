@@ -33,11 +33,9 @@ millionth, verdicts. - reads one of them from standard input.
 Exit status: 0 no verdict is worse in the new one; 1 some verdict is; 2 a
 description or the command line cannot be used; 3 a file could not be read
 or written.`,
-		Args: cobra.ExactArgs(2),
-		RunE: func(_ *cobra.Command, args []string) error { return c.run(args[0], args[1]) },
-		ValidArgsFunction: func(*cobra.Command, []string, string) ([]string, cobra.ShellCompDirective) {
-			return []string{"toml"}, cobra.ShellCompDirectiveFilterFileExt
-		},
+		Args:              cobra.ExactArgs(2),
+		RunE:              func(_ *cobra.Command, args []string) error { return c.run(args[0], args[1]) },
+		ValidArgsFunction: descriptions,
 	}
 	command.Flags().StringVar(&c.json, "json", "", "write the difference as JSON to `FILE`; - is standard output, without the text")
 	localFlag(command.Flags(), &c.local)

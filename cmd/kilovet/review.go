@@ -37,15 +37,13 @@ type reviewing struct {
 func reviewCommand(w world) *cobra.Command {
 	r := &reviewing{world: w}
 	command := &cobra.Command{
-		Use:     "review [CHAIN.toml]",
-		Short:   "Review a description: text, sheets, JSON",
-		Long:    aboutReview,
-		Example: reviewExamples,
-		Args:    cobra.MaximumNArgs(1),
-		RunE:    func(_ *cobra.Command, args []string) error { return r.run(args) },
-		ValidArgsFunction: func(*cobra.Command, []string, string) ([]string, cobra.ShellCompDirective) {
-			return []string{"toml"}, cobra.ShellCompDirectiveFilterFileExt
-		},
+		Use:               "review [CHAIN.toml]",
+		Short:             "Review a description: text, sheets, JSON",
+		Long:              aboutReview,
+		Example:           reviewExamples,
+		Args:              cobra.MaximumNArgs(1),
+		RunE:              func(_ *cobra.Command, args []string) error { return r.run(args) },
+		ValidArgsFunction: descriptions,
 	}
 	flags := command.Flags()
 	r.sheetFlags(command)

@@ -46,9 +46,7 @@ at their lines. It ends with Ctrl+C.`,
 			s.path = args[0]
 			return s.run(c.Context())
 		},
-		ValidArgsFunction: func(*cobra.Command, []string, string) ([]string, cobra.ShellCompDirective) {
-			return []string{"toml"}, cobra.ShellCompDirectiveFilterFileExt
-		},
+		ValidArgsFunction: descriptions,
 	}
 	command.Flags().IntVar(&s.port, "port", 0, "`PORT` to listen on; 0 takes a free one")
 	return command

@@ -30,11 +30,9 @@ func signoffCommand(w world) *cobra.Command {
   kilovet signoff chain.toml --pdf sheet.pdf --date 2025-03-04 \
       --until 2026-03-03 --require life,equipment
   kilovet signoff chain.toml day1.toml --pdf sheet.pdf --date 2025-03-04`,
-		Args: cobra.RangeArgs(1, 2),
-		RunE: func(_ *cobra.Command, args []string) error { return s.run(args) },
-		ValidArgsFunction: func(*cobra.Command, []string, string) ([]string, cobra.ShellCompDirective) {
-			return []string{"toml"}, cobra.ShellCompDirectiveFilterFileExt
-		},
+		Args:              cobra.RangeArgs(1, 2),
+		RunE:              func(_ *cobra.Command, args []string) error { return s.run(args) },
+		ValidArgsFunction: descriptions,
 	}
 	flags := command.Flags()
 	flags.StringVar(&s.pdf, "pdf", "", "write the sheet to `FILE`")

@@ -20,6 +20,9 @@ const (
 	lineRunes   = 88 // of a whole line of a sheet
 )
 
+// crowded is the part of a full line that goes to long texts all the same.
+const crowded = 0.3
+
 // columns shares the width of a table: each has room for its longest number or word,
 // and what is left goes to those with long texts.
 func columns(t exhibit.Table) []Column {
@@ -33,8 +36,8 @@ func columns(t exhibit.Table) []Column {
 	for i, c := range t.Columns {
 		share := float64(wants[i].whole) / float64(whole)
 		switch spare := lineRunes - least; {
-		case whole > lineRunes && spare <= 0: // too many columns: none starves
-			share = float64(wants[i].least) / float64(least)
+		case whole > lineRunes && float64(spare) < crowded*lineRunes: // too many columns: none starves
+			share = (1-crowded)*float64(wants[i].least)/float64(least) + crowded*float64(wants[i].whole-wants[i].least)/float64(max(1, whole-least))
 		case whole > lineRunes:
 			share = (float64(wants[i].least) + float64(spare)*float64(wants[i].whole-wants[i].least)/float64(max(1, whole-least))) / lineRunes
 		}

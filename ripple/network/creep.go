@@ -19,7 +19,7 @@ func (s *search) creep(g grade, small float64) error {
 		return err
 	}
 	periods, steps := s.pace.work.Periods, s.pace.work.Steps
-	for s.pace.work.Periods-periods < mostCreeping && s.pace.work.Steps-steps < s.budget() {
+	for s.pace.work.Periods-periods < mostCreeping && s.pace.work.Steps-steps < s.budget() && !s.spent() {
 		size := norm(s.start)
 		if size == 0 {
 			return nil

@@ -6,7 +6,6 @@ import (
 	"testing"
 
 	"kilovet/hv/circuit"
-	"kilovet/hv/quantity"
 
 	"pgregory.net/rapid"
 )
@@ -71,14 +70,19 @@ func TestAnyLadder(t *testing.T) {
 	rapid.Check(t, func(t *rapid.T) { checkAny(t) })
 }
 
-// roomiest is the greatest capacitance of a circuit. The energy that it swings with is
-// carried to rounding only, however little power there is: hundreds of steps of 1e-16.
-func roomiest(c *circuit.Circuit) float64 {
-	most := 0.0
-	for i := range c.Elements {
-		most = max(most, float64(c.Elements[i].Capacitance))
+// rounding is the power that rounding alone may leave, however little the rest is: of
+// the energy that the largest capacitance swings with, over hundreds of steps, and of the
+// current of the steepest diode, whose voltage is known to 52 bits.
+func rounding(p *Periodic) float64 {
+	peak, roomiest, steepest := float64(p.Circuit.Elements[0].Wave.Amplitude), 0.0, 0.0
+	for i := range p.Circuit.Elements {
+		roomiest = max(roomiest, float64(p.Circuit.Elements[i].Capacitance))
 	}
-	return most
+	for i := range p.track.diodes {
+		steepest = max(steepest, p.track.diodes[i].on)
+	}
+	charge := (1e-9*p.track.typical + 1e-12*roomiest) * float64(p.Frequency)
+	return peak * peak * (charge + 0x1p-52*steepest)
 }
 
 // FuzzAnyLadder is the same under the fuzzer: go test -fuzz FuzzAnyLadder ./ripple/network
@@ -110,8 +114,7 @@ func checkAny(t *rapid.T) {
 		w := float64(p.Power(e.Name))
 		taken, given = taken+w, given+math.Abs(w)
 	}
-	swing := float64(c.Elements[0].Wave.Amplitude * c.Elements[0].Wave.Amplitude * quantity.Voltage(p.Frequency))
-	if math.Abs(taken) > 1e-4*given+1e-9*p.track.typical*swing+1e-12*roomiest(c)*swing {
+	if math.Abs(taken) > 1e-4*given+rounding(p) {
 		t.Errorf("power %g W left of %g W (%+v)", taken, given, p.Work)
 	}
 }

@@ -63,7 +63,7 @@ func (s *search) until(g grade, done func() bool) error {
 	s.pace.smooth, s.stray, s.last, s.leap, s.trial, s.still, s.leaps = false, false, math.Inf(1), 1, false, 0, 0
 	walked, stepped := s.pace.work.Periods, s.pace.work.Steps
 	for range mostCorrections {
-		if s.pace.work.Periods-walked > mostWalks || s.pace.work.Steps-stepped > s.budget() {
+		if s.pace.work.Periods-walked > mostWalks || s.pace.work.Steps-stepped > s.budget() || s.spent() {
 			break
 		}
 		finished, err := s.once(g, done)
@@ -77,6 +77,9 @@ func (s *search) until(g grade, done func() bool) error {
 // budget is the number of steps after which a search is given up: ten times what
 // any ordinary ladder takes.
 func (s *search) budget() int { return 20000 + 500*len(s.diodes) }
+
+// spent reports whether all attempts together have had their steps: about two searches.
+func (s *search) spent() bool { return s.pace.work.Steps > 20000+s.budget() }
 
 // exacting is the part of what the diodes pass below which corrections of the
 // charges ask for events to be located as well as the arithmetic allows.

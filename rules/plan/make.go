@@ -155,7 +155,7 @@ func (m *maker) after() {
 	case worst.Never:
 		todo = append(todo, fmt.Sprintf("%s never falls below 60 V by itself: %s stays. Only the rod discharges it.", worst.Node, quantity.Text(worst.Left)))
 	default:
-		todo = append(todo, fmt.Sprintf("Wait %s at least from full voltage (computed to 60 V at %s).", quantity.Text(worst.Time), worst.Node))
+		todo = append(todo, m.wait(worst))
 	}
 	todo = append(todo, "Watch the meter fall, and never trust a meter alone.",
 		"Rod on the output, the multiplier's top and every column node, one after the other, then leave the earth lead on.")
@@ -163,4 +163,14 @@ func (m *maker) after() {
 		todo = append(todo, "An intact ladder keeps up to "+quantity.Text(rest)+": the rod at every column node is not optional.")
 	}
 	m.plan.After = append(todo, "Before hands go in: prove dead with a tester that was proved on a live source before and after.")
+}
+
+// wait is how long nobody opens anything: as described where that is longer than what is
+// computed.
+func (m *maker) wait(slowest evidence.Discharge) string {
+	computed := fmt.Sprintf("computed to 60 V at %s, nominal parts", slowest.Node)
+	if a := m.e.Chain().Access; a != nil && a.WaitingTime.V > slowest.Time {
+		return fmt.Sprintf("Wait the %s described (%s %s), and longer after a fault.", quantity.Text(a.WaitingTime.V), quantity.Text(slowest.Time), computed)
+	}
+	return fmt.Sprintf("Wait at least %s from full voltage (%s), and longer after a fault.", quantity.Text(slowest.Time), computed)
 }

@@ -175,3 +175,21 @@ func rated(t *testing.T, rating string) *evidence.Evidence {
 	}
 	return evidence.New(c)
 }
+
+// Nobody waits for less than the description says, nor for less than is computed.
+func TestTheWaitIsTheLonger(t *testing.T) {
+	for _, c := range []struct{ described, want string }{{"90 s", "Wait the 90 s described"}, {"1 s", "Wait at least "}} {
+		data, err := os.ReadFile("../../testdata/chains/column.toml")
+		if err != nil {
+			t.Fatal(err)
+		}
+		text := strings.Replace(string(data), `waiting_time    = "90 s"`, `waiting_time    = "`+c.described+`"`, 1)
+		chain, faults := chain.Read([]byte(text))
+		if len(faults) > 0 {
+			t.Fatal(faults)
+		}
+		if after := strings.Join(planned(t, evidence.New(chain)).After, "\n"); !strings.Contains(after, c.want) {
+			t.Errorf("with %s: %s", c.described, after)
+		}
+	}
+}

@@ -38,16 +38,16 @@ func cutoffTable(e *evidence.Evidence) []exhibit.Table {
 	t := exhibit.Table{
 		ID: "gun.cutoffs", Chapter: exhibit.Beam, Title: "Cutoff from the geometry, two ways", Basis: fieldBasis + ", hv.gun",
 		Columns: []exhibit.Column{{Head: "by"}, {Head: "over the voltage", Unit: "1"}, {Head: "cutoff", Unit: "V"}, {Head: "from", Unit: "V"}, {Head: "to", Unit: "V"}},
-		Note:    "The field: control electrode with a fully rounded hole, tip on a rod as thick; the band is that of the setback's tolerance. The tables: thin plates with sharp holes, with their own band.",
+		Note:    "The computed field governs: control electrode with a fully rounded hole, tip on a rod as thick; its band is that of the setback's tolerance and of the hole's edges between rounded and sharp. The tables are an estimate: sharp holes, with their own band.",
 	}
 	row := func(what string, ratio float64, v, low, high quantity.Voltage) {
 		t.Rows = append(t.Rows, []exhibit.Cell{exhibit.Words(what), exhibit.Number(quantity.Fraction(ratio)), exhibit.Number(v), exhibit.Number(low), exhibit.Number(high)})
 	}
-	row("computed field", by.Ratio.Ratio, by.Voltage, by.Low, by.High)
+	row(evidence.ByField, by.Ratio.Ratio, by.Voltage, by.Low, by.High)
 	if table, err := e.CutoffEstimate(); err == nil {
-		row("tabulated geometries", table.Ratio.Ratio, table.Voltage, table.Low, table.High)
+		row(evidence.ByTable, table.Ratio.Ratio, table.Voltage, table.Low, table.High)
 	} else {
-		t.Rows = append(t.Rows, []exhibit.Cell{exhibit.Words("tabulated geometries"), exhibit.Words(err.Error()), exhibit.Words("–"), exhibit.Words("–"), exhibit.Words("–")})
+		t.Rows = append(t.Rows, []exhibit.Cell{exhibit.Words(evidence.ByTable), exhibit.Words(err.Error()), exhibit.Words("–"), exhibit.Words("–"), exhibit.Words("–")})
 	}
 	if g := e.Chain().Gun; g.Cutoff.Set() {
 		t.Rows = append(t.Rows, []exhibit.Cell{exhibit.Words("as stated"), exhibit.Words("–"), exhibit.Number(g.Cutoff.V), exhibit.Words("–"), exhibit.Words("–")})

@@ -92,16 +92,11 @@ func biasRows(e *evidence.Evidence, p gun.Point, row func(what, value, how strin
 	}
 	row("bias", quantity.Text(p.Bias), how)
 	how = "given"
-	if e.CutoffByGeometry() {
-		how = "estimate from the gun's geometry"
+	if c, err := e.CutoffFromGeometry(); err == nil && e.CutoffByGeometry() {
+		how = "from the gun's geometry, " + c.By
 	}
 	row("cutoff", quantity.Text(p.Law().Cutoff()), how)
-	if estimate, err := e.CutoffEstimate(); err == nil {
-		row("cutoff by geometry", fmt.Sprintf("%s, between %s and %s", quantity.Text(estimate.Voltage), quantity.Text(estimate.Low), quantity.Text(estimate.High)),
-			"tabulated solutions, at "+quantity.Text(estimate.Anode))
-	} else if e.Chain().Gun.Geometry != nil {
-		row("cutoff by geometry", "not known", err.Error())
-	}
+	cutoffRows(e, row)
 	if ratio, err := e.CutoffRatio(); err == nil {
 		row("cutoff over working voltage", quantity.Significant(ratio), "the cutoff goes with the voltage")
 	}
@@ -111,6 +106,28 @@ func biasRows(e *evidence.Evidence, p gun.Point, row func(what, value, how strin
 	if b, err := e.BiasNeeded(); err == nil && e.Chain().Bias.Kind.V == "fixed" {
 		row("bias for the given emission", quantity.Text(b), "by the stated law; set is "+quantity.Text(e.Chain().Bias.Voltage.V))
 	}
+}
+
+// cutoffRows sets the cutoff by the computed field before the tabulated estimate.
+func cutoffRows(e *evidence.Evidence, row func(what, value, how string)) {
+	if e.Chain().Gun.Geometry == nil {
+		return
+	}
+	one := func(by string, c evidence.EstimatedCutoff, err error, governs string) {
+		if err != nil {
+			row("cutoff by "+by, "not known", err.Error())
+			return
+		}
+		row("cutoff by "+by, fmt.Sprintf("%s, between %s and %s", quantity.Text(c.Voltage), quantity.Text(c.Low), quantity.Text(c.High)), governs+" at "+quantity.Text(c.Anode))
+	}
+	field, err := e.CutoffByField()
+	one(evidence.ByField, field.EstimatedCutoff, err, "governs,")
+	estimate, outside := e.CutoffEstimate()
+	governs := "estimate,"
+	if err != nil {
+		governs = "governs,"
+	}
+	one(evidence.ByTable, estimate, outside, governs)
 }
 
 func regulationRows(e *evidence.Evidence, row func(what, value, how string)) {

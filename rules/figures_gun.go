@@ -44,8 +44,8 @@ func cutoffFigures(c *collector, e *evidence.Evidence) {
 		add(c, "gun.cutoff_field", "", fieldBasis, by.Voltage, nil)
 		add(c, "gun.cutoff_field_low", "", fieldBasis, by.Low, nil)
 		add(c, "gun.cutoff_field_high", "", fieldBasis, by.High, nil)
-		c.number("gun.influence_control", "", fieldBasis, by.Control)
-		c.number("gun.influence_anode", "", fieldBasis, by.Anode)
+		c.number("gun.influence_control", "", fieldBasis, by.ToControl)
+		c.number("gun.influence_anode", "", fieldBasis, by.ToAnode)
 	}
 	if e.DiodeGun() {
 		return
@@ -53,6 +53,9 @@ func cutoffFigures(c *collector, e *evidence.Evidence) {
 	stated := "as stated"
 	if e.CutoffByGeometry() {
 		stated = basis
+		if c, err := e.CutoffFromGeometry(); err == nil && c.By == evidence.ByField {
+			stated = fieldBasis
+		}
 	}
 	of(c, "gun.cutoff", "", stated, e.Cutoff)
 	if ratio, err := e.CutoffRatio(); err == nil {

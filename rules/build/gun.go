@@ -37,16 +37,32 @@ func Gun(g *chain.GunGeometry) *Arrangement {
 		a.Field = pen{g.Here()}.field(GunName, "vacuum")
 		return a
 	}
-	d := gunSizes{
-		hole: g.ApertureRadius.V, plate: g.PlateThickness.V, tip: g.TipRadius.V, setback: g.Setback.V,
-		anode: g.AnodeDistance.V, anodeHole: g.AnodeApertureRadius.V, flat: g.Cathode.V == "flat",
-	}
+	d := sizesOf(g)
 	a = d.arrangement(pen{g.Here()})
 	a.Dimensions = d.dimensions(g)
 	if !g.PlateThickness.Set() {
 		a.Assumed = append(a.Assumed, "the thickness of the control electrode is not given and taken as thin")
 	}
 	return a
+}
+
+func sizesOf(g *chain.GunGeometry) gunSizes {
+	return gunSizes{
+		hole: g.ApertureRadius.V, plate: g.PlateThickness.V, tip: g.TipRadius.V, setback: g.Setback.V,
+		anode: g.AnodeDistance.V, anodeHole: g.AnodeApertureRadius.V, flat: g.Cathode.V == "flat",
+	}
+}
+
+// SharpGun is Gun at another setback and with sharp edges of the hole in the control
+// electrode: no real hole is sharper.
+func SharpGun(g *chain.GunGeometry, setback quantity.Length) *Arrangement {
+	a := &Arrangement{From: FromGun}
+	if a.Err = needGun(g); a.Err != nil {
+		return a
+	}
+	d := sizesOf(g)
+	d.sharp, d.setback = true, setback
+	return d.arrangement(pen{g.Here()})
 }
 
 func needGun(g *chain.GunGeometry) error {
@@ -63,6 +79,7 @@ func needGun(g *chain.GunGeometry) error {
 type gunSizes struct {
 	hole, plate, tip, setback, anode, anodeHole quantity.Length
 	flat                                        bool
+	sharp                                       bool // edges of the hole in the control electrode
 }
 
 // arrangement draws the gun: back face of the control electrode at z = 0, anode above.
@@ -116,6 +133,9 @@ func (d gunSizes) control(wall, back quantity.Length) []mark {
 	}
 	if d.plate == 0 {
 		return []mark{at(d.hole, 0), at(wall, 0), at(wall, end)}
+	}
+	if d.sharp {
+		return []mark{at(wall, d.plate), at(d.hole, d.plate), at(d.hole, 0), at(wall, 0), at(wall, end)}
 	}
 	edge := d.plate / 2
 	return []mark{at(wall, d.plate), at(d.hole+edge, d.plate), arc(d.hole+edge, 0, d.hole+edge, edge, "left"), at(wall, 0), at(wall, end)}

@@ -8,7 +8,7 @@ import (
 )
 
 // Cutoff is the bias at which emission stops at full working voltage: as stated, else
-// the estimate from the gun's geometry, by the table or, past its ends, by the field.
+// from the gun's geometry.
 func (e *Evidence) Cutoff() (quantity.Voltage, error) {
 	g := e.chain.Gun
 	if g == nil {
@@ -17,23 +17,39 @@ func (e *Evidence) Cutoff() (quantity.Voltage, error) {
 	if g.Cutoff.Set() || g.Geometry == nil {
 		return g.Cutoff.Need()
 	}
-	estimate, err := e.CutoffEstimate()
-	if l := lack.Of(err); l != nil && l.Kind == lack.Outside {
-		if c, err := e.CutoffByField(); err == nil {
-			return c.Voltage, nil
-		}
-	}
-	return estimate.Voltage, err
+	c, err := e.CutoffFromGeometry()
+	return c.Voltage, err
 }
 
-// CutoffByGeometry reports whether the cutoff in use is an estimate.
+// CutoffFromGeometry is the cutoff that the geometry gives: by the computed field; where
+// that has no answer, by the table.
+func (e *Evidence) CutoffFromGeometry() (EstimatedCutoff, error) {
+	by, err := e.CutoffByField()
+	if err == nil {
+		return by.EstimatedCutoff, nil
+	}
+	estimate, outside := e.CutoffEstimate()
+	if outside == nil {
+		return estimate, nil
+	}
+	return estimate, joined(outside, err)
+}
+
+// CutoffByGeometry reports whether the cutoff in use comes from the gun's geometry.
 func (e *Evidence) CutoffByGeometry() bool {
 	g := e.chain.Gun
 	return g != nil && g.Geometry != nil && !g.Cutoff.Set() && !e.DiodeGun()
 }
 
+// Ways from a gun's geometry to its cutoff.
+const (
+	ByField = "computed field"
+	ByTable = "tabulated geometries"
+)
+
 // EstimatedCutoff is a cutoff from the geometry, with its band, at an anode voltage.
 type EstimatedCutoff struct {
+	By                 string // ByField or ByTable
 	Ratio              gun.CutoffEstimate
 	Anode              quantity.Voltage
 	Voltage, Low, High quantity.Voltage
@@ -48,12 +64,20 @@ func (c EstimatedCutoff) Outside(v quantity.Voltage) float64 {
 func (e *Evidence) GunAssumptions() []string {
 	var all []string
 	if e.CutoffByGeometry() {
-		all = append(all, "the cutoff is the estimate from the gun's geometry")
+		all = append(all, e.CutoffAssumption())
 	}
 	if g := e.chain.Gun; g.IsFitted() && !e.DiodeGun() && !g.Exponent.Set() {
 		all = append(all, "emission ~ (cutoff − bias)^2")
 	}
 	return all
+}
+
+// CutoffAssumption says where a cutoff from the geometry comes from.
+func (e *Evidence) CutoffAssumption() string {
+	if c, err := e.CutoffFromGeometry(); err == nil && c.By == ByField {
+		return "the cutoff is computed from the gun's geometry, as cold and as true as drawn"
+	}
+	return "the cutoff is the estimate from the gun's geometry"
 }
 
 // CutoffEstimate is the cutoff from the tabulated geometries at the working voltage,
@@ -69,8 +93,12 @@ func (e *Evidence) CutoffEstimate() (EstimatedCutoff, error) {
 			return EstimatedCutoff{}, err
 		}
 		anode, err := e.anodeVoltage()
-		return EstimatedCutoff{ratio, anode, ratio.Voltage(anode), anode * quantity.Voltage(ratio.Low), anode * quantity.Voltage(ratio.High)}, err
+		return cutoffAt(ByTable, ratio, anode), err
 	})
+}
+
+func cutoffAt(by string, ratio gun.CutoffEstimate, anode quantity.Voltage) EstimatedCutoff {
+	return EstimatedCutoff{by, ratio, anode, ratio.Voltage(anode), anode * quantity.Voltage(ratio.Low), anode * quantity.Voltage(ratio.High)}
 }
 
 // CutoffRatio is the cutoff over the working voltage; the one goes with the other.

@@ -4,6 +4,7 @@ import (
 	"math"
 	"slices"
 
+	"kilovet/hv/chain"
 	"kilovet/hv/gun"
 	"kilovet/hv/lack"
 	"kilovet/hv/profile"
@@ -12,27 +13,37 @@ import (
 	"kilovet/rules/build"
 )
 
-// FieldCutoff is the cutoff from the computed field of the gun's geometry, with the band
-// of the setback's tolerance, over the working voltage and at it.
+// FieldCutoff is the cutoff from the computed field of the gun's geometry, over the working
+// voltage and at it. Its band is that of the setback's tolerance, of the edges of the hole
+// in the control electrode, between fully rounded and sharp, and of the computation.
 type FieldCutoff struct {
-	Control, Anode     float64 // field at the cathode's apex for one volt on each, in 1/m
-	Ratio              gun.CutoffEstimate
-	Voltage, Low, High quantity.Voltage
+	ToControl, ToAnode float64 // field at the cathode's apex for one volt on each, in 1/m
+	EstimatedCutoff
 }
+
+// computedBand is five times what the computed cutoff of a gun was off an independent
+// solution of the same figure by finite elements (see the tests).
+const computedBand = 0.005
 
 // CutoffByField is the cutoff from the computed field of the gun.
 func (e *Evidence) CutoffByField() (FieldCutoff, error) {
-	c, err := remember(e.Under(Condition{}), "cutoff by field", e.fieldCutoff)
+	c, err := e.gunField()
 	if err != nil {
 		return c, err
 	}
 	anode, err := e.anodeVoltage()
-	c.Voltage = c.Ratio.Voltage(anode)
-	c.Low, c.High = anode*quantity.Voltage(c.Ratio.Low), anode*quantity.Voltage(c.Ratio.High)
+	c.EstimatedCutoff = cutoffAt(ByField, c.Ratio, anode)
 	return c, err
 }
 
-// fieldCutoff is what does not depend on the voltage.
+// gunField is what does not depend on the voltage; a change of another part leaves it.
+func (e *Evidence) gunField() (FieldCutoff, error) {
+	if e.before != nil && e.before.chain.Gun == e.chain.Gun {
+		return e.before.gunField()
+	}
+	return remember(e.Under(Condition{}), "cutoff by field", e.fieldCutoff)
+}
+
 func (e *Evidence) fieldCutoff() (c FieldCutoff, err error) {
 	f := e.gunArrangement()
 	if f == nil {
@@ -42,11 +53,12 @@ func (e *Evidence) fieldCutoff() (c FieldCutoff, err error) {
 	if err != nil {
 		return c, err
 	}
-	setback := e.chain.Gun.Geometry.Setback.V
-	if c.Control, c.Anode, c.Ratio.Ratio, err = cutoffOf(s, setback); err != nil {
+	g := e.chain.Gun.Geometry
+	if c.ToControl, c.ToAnode, c.Ratio.Ratio, err = cutoffOf(s, g.Setback.V); err != nil {
 		return c, err
 	}
-	return c, c.band(f, setback, e.chain.Gun.Geometry.SetbackTolerance.V)
+	c.Ratio.Low, c.Ratio.High, err = cutoffBand(f, g)
+	return c, err
 }
 
 func (e *Evidence) gunArrangement() *build.Arrangement {
@@ -75,23 +87,27 @@ func cutoffOf(s *field.Solution, setback quantity.Length) (control, anode, ratio
 	return control, anode, ratio, err
 }
 
-// band is the cutoff with the setback at both ends of its tolerance.
-func (c *FieldCutoff) band(f *build.Arrangement, setback, tolerance quantity.Length) error {
-	c.Ratio.Low, c.Ratio.High = c.Ratio.Ratio, c.Ratio.Ratio
-	if tolerance == 0 {
-		return nil
-	}
+// cutoffBand is between which ratios the cutoff lies with the setback at both ends of its
+// tolerance and the hole's edges rounded or sharp.
+func cutoffBand(f *build.Arrangement, g *chain.GunGeometry) (low, high float64, err error) {
 	i := slices.IndexFunc(f.Dimensions, func(d build.Dimension) bool { return d.Name == build.Setback })
-	for _, v := range []quantity.Length{setback - tolerance, setback + tolerance} {
-		s, err := solve(f.Dimensions[i].With(v))
-		if err != nil {
-			return err
-		}
-		_, _, ratio, err := cutoffOf(s, v)
-		if err != nil {
-			return err
-		}
-		c.Ratio.Low, c.Ratio.High = math.Min(c.Ratio.Low, ratio), math.Max(c.Ratio.High, ratio)
+	low, high = math.Inf(1), math.Inf(-1)
+	ends := []quantity.Length{g.Setback.V - g.SetbackTolerance.V, g.Setback.V + g.SetbackTolerance.V}
+	if g.SetbackTolerance.V == 0 {
+		ends = ends[:1]
 	}
-	return nil
+	for _, setback := range ends {
+		for _, other := range []*build.Arrangement{f.Dimensions[i].With(setback), build.SharpGun(g, setback)} {
+			s, err := solve(other)
+			if err != nil {
+				return 0, 0, err
+			}
+			_, _, ratio, err := cutoffOf(s, setback)
+			if err != nil {
+				return 0, 0, err
+			}
+			low, high = math.Min(low, ratio), math.Max(high, ratio)
+		}
+	}
+	return low * (1 - computedBand), high * (1 + computedBand), nil
 }

@@ -264,7 +264,7 @@ func (e *Evidence) RippleAssumptions() []string {
 		}
 	}
 	if e.CutoffByGeometry() {
-		all = append(all, "the cutoff is the estimate from the gun's geometry")
+		all = append(all, e.CutoffAssumption())
 	} else if c.Gun.IsFitted() && c.Gun.Emission.Set() && !c.Gun.Cutoff.Set() && !e.DiodeGun() {
 		all = append(all, "the gun draws a constant current: its cutoff is not given")
 	}

@@ -9,13 +9,13 @@ import (
 	"kilovet/rules/rule"
 )
 
-var cutoffSource = rule.Source{Text: "tabulated solutions of Laplace's equation for hole, setback, plate and tip, within their band; a stated cutoff more than twofold outside it belongs to another gun", Mark: rule.Derived, Governs: true}
+var cutoffSource = rule.Source{Text: "the computed field of hole, setback, plate, tip and anode, within its band; where that has no answer, tabulated solutions of Laplace's equation; a stated cutoff more than twofold outside it belongs to another gun", Mark: rule.Derived, Governs: true}
 
 var cutoff = rule.Rule{
 	ID: "gun.cutoff", Title: "Cutoff against the gun's geometry",
 	Demands: "The stated cutoff agrees with the one that the geometry gives; where none is stated, the bias stays below the estimate.",
 	Applies: "Where [gun.geometry] is given and the gun has a bias.",
-	Margin:  "marginal outside the band of the estimate, failing by more than a factor of two",
+	Margin:  "marginal outside the band of what the geometry gives, failing by more than a factor of two",
 	Concern: rule.Performance,
 	Sources: []rule.Source{cutoffSource},
 	Example: rule.Example{
@@ -33,11 +33,11 @@ geometry = { aperture_radius = "0.5 mm", plate_thickness = "0.2 mm", tip_radius 
 		}
 		f := rule.Finding{Rule: "gun.cutoff", Subject: "gun", Concern: rule.Performance, Relation: rule.AtMost, Place: g.Geometry.Here(),
 			Under: string(evidence.Working), Sources: []rule.Source{cutoffSource}, Remedy: "correct the geometry or the cutoff; measure the cutoff: the bias at which the emission stops"}
-		x, err := e.CutoffEstimate()
+		x, err := e.CutoffFromGeometry()
 		if err != nil {
 			return rule.One(f.Lacking(err))
 		}
-		band := fmt.Sprintf("the geometry gives %s, between %s and %s, at %s", quantity.Text(x.Voltage), quantity.Text(x.Low), quantity.Text(x.High), quantity.Text(x.Anode))
+		band := geometryGives(e, x)
 		if g.Cutoff.Set() {
 			f.Because = fmt.Sprintf("stated %s; %s", quantity.Text(g.Cutoff.V), band)
 			return rule.One(f.Most(rule.Of(quantity.Fraction(max(x.Outside(g.Cutoff.V), 1))), rule.Of(quantity.Fraction(limits.CutoffApart)), limits.CutoffApart-1).WithoutRemedyIfMet())
@@ -48,8 +48,24 @@ geometry = { aperture_radius = "0.5 mm", plate_thickness = "0.2 mm", tip_radius 
 		}
 		f.Because = fmt.Sprintf("the bias is %s; %s", quantity.Text(bias), band)
 		f = f.Most(rule.Of(bias), rule.Of(x.High), float64(x.High/x.Low)-1)
-		return rule.One(f.Assume("the cutoff is the estimate from the gun's geometry").WithoutRemedyIfMet())
+		return rule.One(f.Assume(e.CutoffAssumption()).WithoutRemedyIfMet())
 	},
+}
+
+// geometryGives says the cutoff from the geometry, and beside a computed one the estimate.
+func geometryGives(e *evidence.Evidence, x evidence.EstimatedCutoff) string {
+	says := func(c evidence.EstimatedCutoff) string {
+		return fmt.Sprintf("%s, between %s and %s", quantity.Text(c.Voltage), quantity.Text(c.Low), quantity.Text(c.High))
+	}
+	text := fmt.Sprintf("the geometry gives %s, at %s, by the %s", says(x), quantity.Text(x.Anode), x.By)
+	if x.By == evidence.ByTable {
+		return text
+	}
+	table, err := e.CutoffEstimate()
+	if err != nil {
+		return text + "; " + err.Error()
+	}
+	return text + "; the estimate from tabulated geometries is " + says(table)
 }
 
 var rangeSource = rule.Source{Text: "the setting of a bias keeps a tenth in hand to the ends of its adjustment", Mark: rule.Practice, Governs: true}

@@ -115,7 +115,9 @@ func cutoffByField(t *testing.T, description []byte) evidence.FieldCutoff {
 
 // Where no cutoff is stated the computed one is worked with, and the estimate stays beside.
 func TestTheComputedCutoffGoverns(t *testing.T) {
-	unstated := func(d []byte) []byte { return []byte(strings.Replace(string(d), `cutoff              = "420 V"`, "", 1)) }
+	unstated := func(d []byte) []byte {
+		return []byte(strings.Replace(string(d), `cutoff              = "420 V"`, "", 1))
+	}
 	r := reviewed(t, unstated(withGun(t, 0.7, 0, 0.06, 0.3, 0.015, 10, 0)))
 	value := map[string]float64{}
 	for _, f := range r.Figures {

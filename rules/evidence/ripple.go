@@ -218,13 +218,14 @@ func (e *Evidence) BiasRipple() (quantity.Voltage, error) {
 }
 
 // CathodeHum is the hum at the cathode, peak to peak: the common mode of the feed and
-// the swing of an AC heater, which are taken to add.
+// the swing of an AC heater, which are taken to add; the heater's centre resistors as
+// stated, or at their worst in a corner of the tolerances.
 func (e *Evidence) CathodeHum() (quantity.Voltage, error) {
 	l, err := e.Hum()
 	if err != nil {
 		return 0, err
 	}
-	tip, err := e.TipSwing()
+	tip, err := e.tipInCorner()
 	return quantity.Voltage(2*cmplx.Abs(l.Cathode)) + 2*tip, err
 }
 

@@ -37,10 +37,26 @@ var disturbance = rule.Rule{
 		if err != nil {
 			return rule.Over(err.Error())
 		}
+		more, assumed, err := tolerated(e)
+		if err != nil {
+			return rule.One(f.Lacking(err))
+		}
 		f.Because = fmt.Sprintf("%s, peak to peak, of the %s that the allowance leaves", quantity.Text(s.Disturbance.PeakToPeak), quantity.Text(allowed))
-		f = f.Most(rule.Of(s.Disturbance.PeakToPeak), rule.Of(allowed), limits.BlurMargin)
-		return rule.One(f.Assume(e.DisturbanceAssumptions()...).WithoutRemedyIfMet())
+		if more > 0 {
+			f.Because += fmt.Sprintf(", and %s more with the heater's centre resistors at the ends of their tolerance", quantity.Text(more))
+		}
+		f = f.Most(rule.Of(s.Disturbance.PeakToPeak+more), rule.Of(allowed), limits.BlurMargin)
+		return rule.One(f.Assume(append(e.DisturbanceAssumptions(), assumed...)...).WithoutRemedyIfMet())
 	},
+}
+
+// tolerated is what the tolerance of the heater's centre resistors adds to a computed
+// disturbance; a measured one holds it.
+func tolerated(e *evidence.Evidence) (quantity.Voltage, []string, error) {
+	if m, err := e.Measured(); m != nil || err != nil {
+		return 0, nil, err
+	}
+	return e.TipBeyondNominal()
 }
 
 var slowSource = rule.Source{Text: "what is too slow to blur defocuses the spot at its ends and moves the edge of the scanned field; neither may exceed what is allowed for the spot", Mark: rule.Derived, Governs: true}

@@ -149,14 +149,22 @@ var humShare = rule.Rule{
 func judgeHum(e *evidence.Evidence, feed *chain.Feed) rule.Finding {
 	f := rule.Finding{Rule: "heater.hum", Subject: "cathode", Concern: rule.Performance, Relation: rule.AtMost,
 		Place: feed.Here(), Under: string(evidence.Working), Sources: []rule.Source{limits.HumSource}}
-	hum, err := e.CathodeHum()
+	hum, assumed, err := e.HumAtWorst()
 	ripple, err2 := e.CathodeRipple()
 	if err := firstOf(err, err2); err != nil {
 		return f.Lacking(err)
 	}
-	f.Because = fmt.Sprintf("the cathode has %s of hum and %s of ripple, peak to peak", quantity.Text(hum), quantity.Text(ripple))
+	f.Because = fmt.Sprintf("the cathode has %s of hum and %s of ripple, peak to peak%s", quantity.Text(hum), quantity.Text(ripple), atWorst(e))
 	f.Remedy = "screen the feed and tie the screen to ground, feed the heater from a battery, or raise its frequency"
-	return f.Most(rule.Of(hum), rule.Of(limits.HumOverRipple*ripple), limits.HumOverRipple-1).WithoutRemedyIfMet()
+	return f.Most(rule.Of(hum), rule.Of(limits.HumOverRipple*ripple), limits.HumOverRipple-1).Assume(assumed...).WithoutRemedyIfMet()
+}
+
+// atWorst says where the hum is more than its figure.
+func atWorst(e *evidence.Evidence) string {
+	if more, _, err := e.TipBeyondNominal(); err == nil && more > 0 {
+		return "; " + quantity.Text(more) + " of the hum by the tolerance of the heater's centre resistors"
+	}
+	return ""
 }
 
 func firstOf(errs ...error) error {

@@ -18,6 +18,7 @@ func powerUp(e *evidence.Evidence) []exhibit.Table {
 	tables := []exhibit.Table{
 		coldChecks(p),
 		todo("plan.before", "Before the first voltage", p.Before),
+		readying(p),
 		steps(p),
 		expectations(p),
 		todo("plan.stops", "Switch off at once at", p.Stops),
@@ -58,14 +59,31 @@ func todo(id, title string, list []string) exhibit.Table {
 	return t
 }
 
-func steps(p *plan.Plan) exhibit.Table {
-	t := exhibit.Table{ID: "plan.steps", Title: "Steps of the first power-up",
-		Columns: []exhibit.Column{{Head: "step"}, {Head: "first"}, {Head: "drive, peak", Unit: "V"}, {Head: "held", Unit: "s"}, {Head: "output", Unit: "V"}, {Head: "drive power", Unit: "W"}, {Head: "to 60 V after switching off"}, done}}
+func readying(p *plan.Plan) exhibit.Table {
+	t := exhibit.Table{ID: "plan.first", Title: "Before a step", Columns: []exhibit.Column{{Head: "step"}, {Head: "what"}, done}}
 	for _, s := range p.Steps {
-		t.Rows = append(t.Rows, []exhibit.Cell{exhibit.Words(s.Name), exhibit.Words(strings.Join(s.First, " ")), exhibit.Number(s.Peak), exhibit.Number(s.Dwell),
-			exhibit.Number(s.Output), exhibit.Number(s.Power), exhibit.Words(until(s.Discharge)), exhibit.Words("")})
+		for _, first := range s.First {
+			t.Rows = append(t.Rows, texts(s.Name, first, ""))
+		}
 	}
 	return t
+}
+
+func steps(p *plan.Plan) exhibit.Table {
+	t := exhibit.Table{ID: "plan.steps", Title: "Steps of the first power-up", Note: strings.Join(p.Takes, "; ") + "; more return current than this is leakage or corona",
+		Columns: []exhibit.Column{{Head: "step"}, {Head: "drive, peak", Unit: "V"}, {Head: "held", Unit: "s"}, {Head: "output", Unit: "V"}, {Head: "ripple, pp", Unit: "V"}, {Head: "drive power", Unit: "W"}, {Head: "return current", Unit: "A"}, {Head: "off: to 60 V after"}, done}}
+	for _, s := range p.Steps {
+		t.Rows = append(t.Rows, []exhibit.Cell{exhibit.Words(s.Name), exhibit.Number(s.Peak), exhibit.Number(s.Dwell),
+			exhibit.Number(s.Output), known(s.Ripple), exhibit.Number(s.Power), known(s.Return), exhibit.Words(until(s.Discharge)), exhibit.Words("")})
+	}
+	return t
+}
+
+func known[Q quantity.Number](q *Q) exhibit.Cell {
+	if q == nil {
+		return exhibit.Words("not known")
+	}
+	return exhibit.Number(*q)
 }
 
 func until(d evidence.Discharge) string {

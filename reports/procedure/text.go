@@ -75,6 +75,9 @@ func step(w *lines.Writer, number int, s *plan.Step) {
 	}
 	w.Hang("    ", 4, fmt.Sprintf("set the drive to %s, hold for %s; output %s%s, drive power %s",
 		quantity.Text(s.Peak), quantity.Text(s.Dwell), quantity.Text(s.Output), ripple(s), quantity.Text(s.Power)))
+	if s.Return != nil {
+		w.Hang("    ", 4, "return of the multiplier: "+quantity.Text(*s.Return)+"; what is more than that is leakage or corona  "+box)
+	}
 	for _, r := range s.Readings {
 		w.Hang("    ", 4, r.Instrument+": "+r.Text()+"  "+box)
 	}

@@ -44,6 +44,9 @@ func takes(c *chain.Chain) []string {
 		"levels and times of the steps are common practice, no source",
 		"without emission a disconnected gun and a cold one read alike",
 	}
+	if b := c.Beam; b != nil && b.MeasuredRipple.Set() {
+		all = append(all, "ripple and readings of every step are computed; the measured record "+b.MeasuredRipple.V+" takes the place of the computed ripple in the disturbance and blur of the beam alone, at full voltage with the gun working")
+	}
 	for i := range c.Instruments {
 		in := &c.Instruments[i]
 		if !in.Accuracy.Set() {

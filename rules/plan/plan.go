@@ -74,6 +74,7 @@ type Step struct {
 	Peak      quantity.Voltage // of the drive, to set, zero to peak
 	Output    quantity.Voltage // mean at the output, signed
 	Ripple    *quantity.Voltage
+	Return    *quantity.Current // mean, in the multiplier's return: more is leakage or corona
 	Power     quantity.Power // that the drive gives
 	Readings  []Reading
 	Discharge evidence.Discharge

@@ -67,6 +67,9 @@ func (m *maker) fill(s *Step) (err error) {
 	if ripple, err := at.Swing("output", "ground"); err == nil {
 		s.Ripple = &ripple
 	}
+	if i, err := at.ReturnCurrent(); err == nil {
+		s.Return = &i
+	}
 	if s.Power, err = at.InputPower(); err != nil {
 		return err
 	}

@@ -75,7 +75,7 @@ type Step struct {
 	Output    quantity.Voltage // mean at the output, signed
 	Ripple    *quantity.Voltage
 	Return    *quantity.Current // mean, in the multiplier's return: more is leakage or corona
-	Power     quantity.Power // that the drive gives
+	Power     quantity.Power    // that the drive gives
 	Readings  []Reading
 	Discharge evidence.Discharge
 	Dwell     quantity.Time

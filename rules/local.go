@@ -4,9 +4,11 @@ import (
 	"fmt"
 	"strings"
 
+	"kilovet/hv/chain"
 	"kilovet/hv/document"
 	"kilovet/rules/exhibit"
 	"kilovet/rules/local"
+	"kilovet/rules/spacing"
 )
 
 // ReadLocal reads a file of local limits.
@@ -23,13 +25,13 @@ func ids() []string {
 	return ids
 }
 
-// under judges the findings of a review anew by local limits.
-func (r *Review) under(f *local.File) document.Faults {
+// under judges the findings of a review anew by local limits, then what rests on them.
+func (r *Review) under(f *local.File, c *chain.Chain) document.Faults {
 	if f == nil {
 		return nil
 	}
 	findings, outcomes, faults := local.Apply(f, r.Findings, r.PassedOver)
-	r.Findings, r.Local = findings, outcomes
+	r.Findings, r.Local = spacing.WeakestAgain(c, findings), outcomes
 	return faults
 }
 

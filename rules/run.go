@@ -49,7 +49,7 @@ func RunUnder(c *chain.Chain, inputs []Input, program Program, beside Beside) (*
 			r.take(rl, judged(e, f, rl))
 		}
 	}
-	if faults := r.under(beside.Limits); len(faults) > 0 {
+	if faults := r.under(beside.Limits, c); len(faults) > 0 {
 		return nil, faults
 	}
 	r.Figures = figures(e)

@@ -11,8 +11,8 @@ func Text[Q Number](q Q) string { return q.Dimension().Text(float64(q)) }
 
 // Text writes an SI value of the dimension for people: four significant digits
 // and, where it is usual, an SI prefix; temperatures in degrees Celsius below
-// 1000 K, times from 1000 s in minutes and from ten hours in hours, fractions in per
-// cent or ppm. What is smaller than the smallest prefix can say is "below 1 fm".
+// 1000 K, times from 1000 s in minutes and from ten hours in hours, angles from 100 mrad in
+// degrees, fractions in per cent or ppm. What is smaller than the smallest prefix can say is "below 1 fm".
 func (d *Dimension) Text(v float64) string {
 	switch {
 	case d == temperature && v < 1000:
@@ -21,6 +21,8 @@ func (d *Dimension) Text(v float64) string {
 		return Significant(v/3600) + " h"
 	case d == duration && math.Abs(v) >= 1000:
 		return Significant(v/60) + " min"
+	case d == angle && math.Abs(v) >= degreesFrom:
+		return Significant(v*180/math.Pi) + " deg"
 	case d == fraction:
 		return fractionText(v)
 	case d == area:
@@ -38,6 +40,9 @@ func (d *Dimension) Text(v float64) string {
 	}
 	return engineering(v, strings.ReplaceAll(d.SI, "ohm", "Ω"))
 }
+
+// degreesFrom is the angle, 100 mrad, from which one is said in degrees.
+const degreesFrom = 0.1
 
 // DimensionOf finds the dimension whose results carry the SI unit; nil where none does.
 func DimensionOf(si string) *Dimension {

@@ -2,6 +2,7 @@ package spacing
 
 import (
 	"fmt"
+	"slices"
 	"strings"
 
 	"kilovet/hv/chain"
@@ -38,13 +39,45 @@ var weakest = rule.Rule{
 	},
 }
 
+// ofParts are the rules about what feedthroughs have.
+func ofParts() []rule.Rule {
+	return []rule.Rule{clearance, creepage, breakdown, corona, junction, annulus}
+}
+
 // judgedParts are the findings of everything that feedthroughs have.
 func judgedParts(e *evidence.Evidence) []rule.Finding {
 	var all []rule.Finding
-	for _, r := range []rule.Rule{clearance, creepage, breakdown, corona, junction, annulus} {
+	for _, r := range ofParts() {
 		all = append(all, r.Judge(e).Findings...)
 	}
 	return all
+}
+
+// WeakestAgain are the findings of a review with those of the weakest parts made anew from
+// what the findings about the parts say now, after local limits have judged them.
+func WeakestAgain(c *chain.Chain, findings []rule.Finding) []rule.Finding {
+	ids := map[string]bool{}
+	for _, r := range ofParts() {
+		ids[r.ID] = true
+	}
+	var parts []rule.Finding
+	for _, f := range findings {
+		if ids[f.Rule] {
+			parts = append(parts, f)
+		}
+	}
+	again := slices.Clone(findings)
+	for i, f := range findings {
+		if f.Rule != weakest.ID {
+			continue
+		}
+		for k := range c.Feedthroughs {
+			if c.Feedthroughs[k].Name.V == f.Subject {
+				again[i] = judgeWeakest(&c.Feedthroughs[k], parts)
+			}
+		}
+	}
+	return again
 }
 
 func judgeWeakest(f *chain.Feedthrough, all []rule.Finding) rule.Finding {

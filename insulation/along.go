@@ -89,10 +89,8 @@ func breakdownAlong(g gap.Gap, l shape.Line, sharp gap.Polarity, starts gap.Resu
 		return none, lack.Of(starts.Lack)
 	case s.Gas != gap.AirGas:
 		return starts.Answer, nil
-	case sharp == gap.Negative:
-		return crossing(s, l, gas.Needles, starts)
 	}
-	return crossing(s, l, gas.PointPlane, starts)
+	return oneSided(s, l, sharp, starts)
 }
 
 // AtEdge is what the field at a distance from a sharp edge or from the junction of an

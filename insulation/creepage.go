@@ -39,7 +39,7 @@ func creepageOf(g gap.Gap, v gap.Voltages, group table.Group, source gap.Source)
 		clearance.Sources = append(clearance.Sources, source)
 		return clearance, noClearance
 	}
-	a, err := tracked(g, v.LongTerm, group)
+	a, err := tracked(g, v, group)
 	if err != nil {
 		return gap.Answer[quantity.Length]{}, err
 	}
@@ -54,14 +54,19 @@ func creepageOf(g gap.Gap, v gap.Voltages, group table.Group, source gap.Source)
 	return a, nil
 }
 
-// tracked is the creepage of Table F.5 with the step of the insulation class.
-func tracked(g gap.Gap, longTerm quantity.Voltage, group table.Group) (gap.Answer[quantity.Length], error) {
-	r, err := table.Creepage(longTerm, table.Surface{
-		Degree: degreeOn(g), Group: group, PrintedWiring: g.Medium == gap.PrintedBoard, Ribbed: g.Ribbed,
-	})
+// tracked is the creepage of Table F.5 with the step of the insulation class, and with what
+// ribs of size take off it.
+func tracked(g gap.Gap, v gap.Voltages, group table.Group) (gap.Answer[quantity.Length], error) {
+	on := table.Surface{Degree: degreeOn(g), Group: group, PrintedWiring: g.Medium == gap.PrintedBoard}
+	r, err := table.Creepage(v.LongTerm, on)
 	if err != nil {
 		return gap.Answer[quantity.Length]{}, err
 	}
+	return withRibs(g, v, on, stepped(g, v.LongTerm, group, r)), nil
+}
+
+// stepped is a reading of Table F.5 as an answer, twice it for reinforced insulation.
+func stepped(g gap.Gap, longTerm quantity.Voltage, group table.Group, r table.Reading[quantity.Length]) gap.Answer[quantity.Length] {
 	a := gap.Answer[quantity.Length]{
 		Value:   r.Value,
 		Because: fmt.Sprintf("%s long-term on %s: %s, %s", quantity.Text(longTerm), group, r.Source.Text, r.Rows),
@@ -76,7 +81,7 @@ func tracked(g gap.Gap, longTerm quantity.Voltage, group table.Group) (gap.Answe
 	if longTerm > scope {
 		a.Because += "; beyond the standard's scope of 1.5 kV DC"
 	}
-	return a, nil
+	return a
 }
 
 // raised is the creepage brought up to the clearance needed.

@@ -108,8 +108,9 @@ func measuringGap(g gap.Gap, s gas.State) (table.Reading[quantity.Voltage], erro
 // Breakdown is the peak or DC voltage that a gap in a gas breaks down at. Between
 // plates it is the law of uniform fields or Paschen's; round other shapes the onset or,
 // where it is higher in air, what sharp electrodes at the same distance stand; without a
-// shape it is that of needle points. The polarity is that of the sharper electrode; a
-// positive or unknown one against a blunt one stands less than a pair of needles.
+// shape it is that of needle points. The polarity is that of the sharper electrode: a
+// positive or unknown one against a blunt one stands less than a pair of needles, of which
+// one is positive whatever the polarity.
 func Breakdown(g gap.Gap, sharp gap.Polarity) (gap.Answer[quantity.Voltage], error) {
 	return breakdown(g, sharp, gap.ResultOf(Onset(g)))
 }
@@ -138,11 +139,27 @@ func breakdown(g gap.Gap, sharp gap.Polarity, starts gap.Result[quantity.Voltage
 	case g.Shape.Kind == gap.Plates || s.Gas != gap.AirGas:
 		return starts.Answer, nil
 	}
-	law := gas.PointPlane
-	if twoSided(g.Shape.Kind) || sharp == gap.Negative {
-		law = gas.Needles
+	if twoSided(g.Shape.Kind) {
+		return crossing(s, l, gas.Needles, starts)
 	}
-	return crossing(s, l, law, starts)
+	return oneSided(s, l, sharp, starts)
+}
+
+// oneSided is the breakdown of a sharper electrode against a blunter one by its polarity,
+// that of the positive one where it is not known.
+func oneSided(s gas.State, l shape.Line, sharp gap.Polarity, starts gap.Result[quantity.Voltage]) (gap.Answer[quantity.Voltage], error) {
+	law, told := gas.PointPlane, "the sharper electrode is positive"
+	switch sharp {
+	case gap.Negative:
+		law, told = gas.Needles, "the sharper electrode is negative, and stands no less than a pair of needles"
+	case gap.Unknown:
+		told = "the sharper electrode is taken as positive, the worse"
+	}
+	a, err := crossing(s, l, law, starts)
+	if err == nil && (starts.Lack != nil || a.Value > starts.Value) {
+		a.Because += "; " + told
+	}
+	return a, err
 }
 
 // needles is the breakdown of a gap whose electrodes are not described.

@@ -19,6 +19,7 @@ func checkSpacings(s *survey) {
 		s.tested(sp.TestedVoltage, sp.TestedLength)
 		s.strengthOf(sp.Strength, sp.TestedThickness)
 		s.spacingMedium(sp)
+		s.sharperOf(sp)
 	}
 }
 

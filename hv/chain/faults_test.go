@@ -428,6 +428,38 @@ senses = "cathode"     # FAULT 10 node: divider.senses: "cathode" is no node of 
 upper.value = "1 Gohm"
 lower.value = "1 Mohm"
 `,
+	"sharper electrodes": whole + `
+[[spacing]]
+name = "by side"
+from = "cathode"
+to = "ground"
+medium = "air"
+sharper_electrode = "negative" # FAULT 21 spacing: spacing.sharper_electrode: a polarity where the nodes have one; give from or to
+shape = { kind = "sphere-plane", radius = "5 mm" }
+[[spacing]]
+name = "by polarity"
+voltage = "20 kV"
+medium = "air"
+sharper_electrode = "from" # FAULT 21 spacing: spacing.sharper_electrode: a side of a spacing that is between no nodes; give positive or negative
+shape = { kind = "sphere-plane", radius = "5 mm" }
+[[spacing]]
+name = "no shape"
+voltage = "20 kV"
+medium = "air"
+sharper_electrode = "negative" # FAULT 21 spacing: spacing.sharper_electrode: no shape: both electrodes are judged as sharp; describe the shape
+[[spacing]]
+name = "alike"
+voltage = "20 kV"
+medium = "air"
+sharper_electrode = "negative" # FAULT 21 spacing: spacing.sharper_electrode: the electrodes of a shape of kind "plates" are alike
+shape = { kind = "plates" }
+[[spacing]]
+name = "elsewhere"
+voltage = "20 kV"
+medium = "vacuum"
+sharper_electrode = "negative" # FAULT 21 spacing: spacing.sharper_electrode: a key of spacings in air, not in vacuum
+shape = { kind = "point-plane", tip_radius = "1 mm" }
+`,
 	"spacings": whole + `
 [[spacing]]
 name = "a"

@@ -84,9 +84,10 @@ type Strip struct {
 // Ribs are like ribs across a surface.
 type Ribs struct {
 	document.Table
-	Count document.Given[int]             `key:"count" range:">= 1, <= 1000" needed:"yes" means:"how many ribs" example:"5"`
-	Depth document.Given[quantity.Length] `key:"depth" range:"> 0 mm, <= 1 m" needed:"yes" means:"height of a rib over the ground of the groove beside it" example:"8 mm"`
-	Width document.Given[quantity.Length] `key:"width" range:"> 0 mm, <= 1 m" needed:"yes" means:"clear width of the grooves between them" example:"5 mm"`
+	Count     document.Given[int]             `key:"count" range:">= 1, <= 1000" needed:"yes" means:"how many ribs" example:"5"`
+	Depth     document.Given[quantity.Length] `key:"depth" range:"> 0 mm, <= 1 m" needed:"yes" means:"height of a rib over the ground of the groove beside it" example:"8 mm"`
+	Width     document.Given[quantity.Length] `key:"width" range:"> 0 mm, <= 1 m" needed:"yes" means:"clear width of the grooves between them" example:"5 mm"`
+	Thickness document.Given[quantity.Length] `key:"thickness" range:"> 0 mm, <= 1 m" means:"thickness of a rib along the surface; pollution degree 3 asks for less creepage where ribs are large enough" example:"12 mm"`
 }
 
 // Inner is the radius of the bore: that of the pin where none is given.

@@ -112,13 +112,24 @@ func (f *Feedthrough) open() []Spacing {
 	s := f.spacing(PinGap, medium)
 	s.Clearance = at(f.Hole.Radius, f.Hole.Radius.V-f.Pin.Radius.V)
 	s.Shape = &Shape{Kind: at(f.Hole.Radius, "coaxial"), InnerRadius: f.Pin.Radius, OuterRadius: f.Hole.Radius}
+	s.SharperElectrode = f.sharper("from")
 	if !f.Hole.EdgeRadius.Set() {
 		return []Spacing{s}
 	}
 	edge := f.spacing(EdgeGap, medium)
 	edge.Clearance = s.Clearance
 	edge.Shape = &Shape{Kind: at(f.Hole.EdgeRadius, "rounded edge"), EdgeRadius: f.Hole.EdgeRadius}
+	edge.SharperElectrode = f.sharper("to")
 	return []Spacing{s, edge}
+}
+
+// sharper is the side of the sharper electrode where the pin has a node: of the pin between
+// it and the plate, of the plate at its edge.
+func (f *Feedthrough) sharper(side string) document.Given[string] {
+	if !f.Node.Set() {
+		return document.Given[string]{}
+	}
+	return at(f.Node, side)
 }
 
 // wall is the sleeve alone under the whole voltage, as when the annuli have discharged.

@@ -15,7 +15,6 @@ type Gap struct {
 	Material string            // of the surface or the solid
 	CTI      *quantity.Voltage // comparative tracking index, in place of a material
 	Board    Board             // printed boards only
-	Ribbed   bool              // a rib of the size Table F.5 asks for breaks the surface
 
 	PollutionDegree int // 1 to 4, IEC 60664-1
 	Altitude        *quantity.Length
@@ -49,6 +48,7 @@ type Tested struct {
 type Ribs struct {
 	Count        int
 	Depth, Width quantity.Length // height of a rib; clear width of the grooves between
+	Thickness    quantity.Length // of a rib along the surface; zero: not given
 }
 
 // Mains is the supply whose transients reach a gap.

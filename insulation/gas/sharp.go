@@ -46,7 +46,7 @@ func Needles(s State, d quantity.Length) (gap.Answer[quantity.Voltage], error) {
 	density := s.density25()
 	a, err := normalNeedles(d * quantity.Length(min(1, density/thinnest)))
 	a.Value *= quantity.Voltage(min(max(density, thinnest), densest))
-	return ofSharp.applied(s, a), err
+	return sharpened(s, d, a), err
 }
 
 // normalNeedles is Needles at 25 °C and 760 Torr.
@@ -108,7 +108,7 @@ func PointPlane(s State, d quantity.Length) (gap.Answer[quantity.Voltage], error
 		a.Value, a.Because = quantity.Voltage(crossing), "positive streamers cross the gap at a mean of 4.5 kV/cm"
 		a.Sources = []gap.Source{{Text: "least field of positive streamers, Lehtinen and Østgaard", Mark: gap.Read, Governs: true}}
 	}
-	return ofSharp.applied(s, a), nil
+	return sharpened(s, d, a), nil
 }
 
 // tableDensity is that of air at 80 kPa and 20 °C, for which the clearances hold.

@@ -22,6 +22,7 @@ type Critical struct {
 	Line        shape.Line
 	Volts       quantity.Voltage // across the line at this stress, a magnitude
 	Polarity    gap.Polarity     // of the electrode it starts from; unknown on a dielectric
+	Sharp       gap.Polarity     // of the end with the greater field
 	Strength    insulation.Strength
 	Positive    gap.Result[quantity.Voltage] // breakdown with the start positive
 	Negative    gap.Result[quantity.Voltage] // and negative
@@ -48,7 +49,8 @@ func (e *Evidence) Critical(f *build.Arrangement, w Where) (Critical, error) {
 		}
 		c.Volts, c.Polarity = across(c.Traced, w, f)
 		g := e.Filling(f, s.Body)
-		c.Strength = insulation.StrengthAlong(g, c.Line, sharpEnd(c.Polarity, reversed))
+		c.Sharp = sharpEnd(c.Polarity, reversed)
+		c.Strength = insulation.StrengthAlong(g, c.Line, c.Sharp)
 		c.Positive = insulation.StrengthAlong(g, c.Line, sharpEnd(gap.Positive, reversed)).Breakdown
 		c.Negative = insulation.StrengthAlong(g, c.Line, sharpEnd(gap.Negative, reversed)).Breakdown
 		c.Streamer, err = insulation.StreamerAlong(g, c.Line, c.Volts)

@@ -1,6 +1,7 @@
 package evidence
 
 import (
+	"kilovet/hv/lack"
 	"kilovet/hv/quantity"
 	"kilovet/insulation"
 	"kilovet/insulation/gap"
@@ -19,6 +20,16 @@ func (x Spacing) GapFor(v quantity.Voltage) (quantity.Length, error) {
 // RadiusFor is the sharpest radius at which it breaks down at a voltage, the distance kept.
 func (x Spacing) RadiusFor(v quantity.Voltage) (quantity.Length, error) {
 	return insulation.RadiusForBreakdown(x.Gap, v, x.Voltages.Sharp)
+}
+
+// IfNegative is what the spacing would stand with its sharper electrode negative, where
+// the polarity is not known.
+func (x Spacing) IfNegative() (quantity.Voltage, error) {
+	if x.Voltages.Sharp != gap.Unknown {
+		return 0, lack.Failed("the polarity is known")
+	}
+	a, err := insulation.Breakdown(x.Gap, gap.Negative)
+	return a.Value, err
 }
 
 // SurfaceFor is the length of surface in vacuum that flashes over at a voltage.

@@ -87,7 +87,7 @@ func nodesOf(s *chain.Spacing) []string { return append([]string{s.From.V}, s.Al
 
 func (e *Evidence) across(s *chain.Spacing) (v gap.Voltages, under, long Condition, err error) {
 	if s.Voltage.Set() {
-		return gap.Voltages{Peak: s.Voltage.V, LongTerm: s.Voltage.V}, under, long, nil
+		return gap.Voltages{Peak: s.Voltage.V, LongTerm: s.Voltage.V, Sharp: gap.Polarity(s.SharperElectrode.V)}, under, long, nil
 	}
 	live := nodesOf(s)
 	peak, err := Worst(e, live, func(e *Evidence, n string) (quantity.Voltage, error) { return e.Between(n, s.To.V) })
@@ -98,8 +98,11 @@ func (e *Evidence) across(s *chain.Spacing) (v gap.Voltages, under, long Conditi
 	if err != nil {
 		return v, under, long, err
 	}
-	// Which electrode is the sharper one is not described: the worse polarity judges.
-	v = gap.Voltages{Peak: peak.Value, LongTerm: lasting.Value, Sharp: gap.Unknown}
+	sharp, err := e.sharp(s)
+	if err != nil {
+		return v, under, long, err
+	}
+	v = gap.Voltages{Peak: peak.Value, LongTerm: lasting.Value, Sharp: sharp}
 	err = e.alternating(s, live, &v)
 	return v, peak.Under, lasting.Under, err
 }
@@ -129,7 +132,7 @@ func (e *Evidence) gap(s *chain.Spacing) gap.Gap {
 	g.Tested = gap.Tested{Voltage: s.TestedVoltage.V, Length: s.TestedLength.V}
 	g.Polished, g.Conditioned = known(s.Finish, "polished"), known(s.Conditioned, true)
 	if r := s.Ribs; r != nil {
-		g.Ribs = gap.Ribs{Count: r.Count.V, Depth: r.Depth.V, Width: r.Width.V}
+		g.Ribs = gap.Ribs{Count: r.Count.V, Depth: r.Depth.V, Width: r.Width.V, Thickness: r.Thickness.V}
 	}
 	if s.CTI.Set() {
 		g.CTI = &s.CTI.V

@@ -26,6 +26,11 @@ func (e *Evidence) byField(s *chain.Spacing, x *Spacing) {
 		x.Assessment.Strength = insulation.Strength{Onset: gap.Result[quantity.Voltage]{Lack: none}, FieldLimit: gap.Result[quantity.Field]{Lack: none}, Breakdown: gap.Result[quantity.Voltage]{Lack: none}}
 		return
 	}
+	if x.Voltages.Sharp == gap.Unknown && s.From.Set() {
+		if steady, err := e.polarityOf(s, "from"); err == nil && steady != gap.Unknown {
+			x.Voltages.Sharp = c.Sharp // the computed field tells which end is the sharper
+		}
+	}
 	by := insulation.StrengthAlong(x.Gap, c.Line, x.Voltages.Sharp)
 	shape := "no closed shape"
 	if x.Gap.Shape != nil {

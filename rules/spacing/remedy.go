@@ -96,7 +96,16 @@ func againstBreakdown(s *chain.Spacing, x evidence.Spacing) string {
 	if alternatives(ways...) == "" {
 		ways = append(ways, rounded(s, x, v))
 	}
-	return alternatives(append(ways, medium(x), "lower the voltage")...)
+	return alternatives(append(ways, sided(s, x), medium(x), "lower the voltage")...)
+}
+
+// sided is what it would change to say that the sharper electrode is the negative one.
+func sided(s *chain.Spacing, x evidence.Spacing) string {
+	v, err := x.IfNegative()
+	if err != nil || s.Field.Set() || s.Of != nil || quantity.AtMost(v, x.Assessment.Breakdown.Value) {
+		return ""
+	}
+	return "say spacing.sharper_electrode: if that is the negative one the gap stands " + quantity.Text(v)
 }
 
 // medium is another medium that would do at the distance there is.

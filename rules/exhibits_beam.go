@@ -25,9 +25,23 @@ func pathsTable(e *evidence.Evidence) []exhibit.Table {
 			t.Rows = append(t.Rows, append(row, none, none, none, none, exhibit.Words("not known: "+p.Unknown.Error())))
 			continue
 		}
-		t.Rows = append(t.Rows, append(row, frequencyCell(p), exhibit.Number(p.Voltage), exhibit.Number(p.Bias), exhibit.Number(p.Emission), exhibit.Words(effect(e, p))))
+		t.Rows = append(t.Rows, append(row, frequencyCell(p), exhibit.Number(p.Voltage), biasCell(e, p), emissionCell(e, p), exhibit.Words(effect(e, p))))
 	}
 	return []exhibit.Table{t}
+}
+
+func biasCell(e *evidence.Evidence, p evidence.Path) exhibit.Cell {
+	if e.Chain().Bias == nil {
+		return exhibit.Words("no bias")
+	}
+	return exhibit.Number(p.Bias)
+}
+
+func emissionCell(e *evidence.Evidence, p evidence.Path) exhibit.Cell {
+	if e.NoAnswer() != nil {
+		return exhibit.Words("not known")
+	}
+	return exhibit.Number(p.Emission)
 }
 
 func frequencyCell(p evidence.Path) exhibit.Cell {

@@ -115,7 +115,7 @@ func emission(c *collector, e *evidence.Evidence) {
 		basis = "no emission in this state"
 	}
 	of(c, "gun.emission", "", basis, e.Emission)
-	if c.state == evidence.Working {
+	if c.state == evidence.Working && e.Chain().Gun.IsFitted() {
 		of(c, "gun.emission_law", "", "hv.gun", e.EmissionByLaw)
 		if p, err := e.Gun(); err == nil {
 			c.number("gun.loop_gain", "", "hv.gun", p.LoopGain())

@@ -99,7 +99,9 @@ func paths(c *collector, e *evidence.Evidence) {
 			add(c, "path.frequency", p.Name, basis, p.Frequency, nil)
 		}
 		add(c, "path.voltage", p.Name, basis, p.Voltage, nil)
-		add(c, "path.bias", p.Name, basis, p.Bias, nil)
-		add(c, "path.emission", p.Name, basis, p.Emission, nil)
+		if e.Chain().Bias != nil {
+			add(c, "path.bias", p.Name, basis, p.Bias, nil)
+		}
+		add(c, "path.emission", p.Name, basis, p.Emission, e.NoAnswer())
 	}
 }

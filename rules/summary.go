@@ -24,9 +24,7 @@ func summary(e *evidence.Evidence) []Line {
 		{"Control", control(e)},
 		{"Output", outputLine(e)},
 	}
-	if c.HasCathode() {
-		lines = append(lines, Line{"Ripple", rippleLine(e)})
-	}
+	lines = append(lines, Line{"Ripple", rippleLine(e)})
 	if c.Beam != nil {
 		lines = append(lines, Line{"Blur", blurLine(e)})
 	}
@@ -58,6 +56,13 @@ func outputLine(e *evidence.Evidence) string {
 }
 
 func rippleLine(e *evidence.Evidence) string {
+	if !e.Chain().HasCathode() {
+		ripple, err := e.Swing("output", "ground")
+		if err != nil {
+			return "not known: " + err.Error()
+		}
+		return quantity.Text(ripple) + " at the output, peak to peak"
+	}
 	if m, err := e.Measured(); m != nil && err == nil {
 		return fmt.Sprintf("%s measured at the cathode, peak to peak", quantity.Text(m.PeakToPeak()))
 	}

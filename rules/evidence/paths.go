@@ -40,6 +40,12 @@ func (e *Evidence) Paths() []Path {
 	return all
 }
 
+// NoAnswer is why no swing of the emission is known; nil where the law is.
+func (e *Evidence) NoAnswer() error {
+	_, err := e.Gun()
+	return err
+}
+
 // emissionSwing is what a path makes of the emission, by the bias and by the high voltage
 // that the cutoff goes with, which are taken to add; none where the law is not known.
 func (e *Evidence) emissionSwing(of Path) quantity.Fraction {

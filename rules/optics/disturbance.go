@@ -24,8 +24,8 @@ var disturbance = rule.Rule{
 	},
 	Judge: func(e *evidence.Evidence) rule.Judgement {
 		b := e.Chain().Beam
-		if b == nil || !b.BlurAllowance.Set() || e.Spotless() != nil {
-			return rule.Over("no blur allowance is stated")
+		if why := noAllowance(e); why != "" {
+			return rule.Over(why)
 		}
 		f := rule.Finding{Rule: "beam.disturbance", Subject: "cathode", Concern: rule.Performance, Relation: rule.AtMost, Place: b.BlurAllowance.Place,
 			Under: string(evidence.Working), Sources: []rule.Source{allowedSource}, Remedy: "see the table of what would reach the allowance"}
@@ -75,8 +75,11 @@ field_width          = "1 mm"`}},
 	},
 	Judge: func(e *evidence.Evidence) rule.Judgement {
 		b := e.Chain().Beam
-		if b == nil || !b.BlurAllowance.Set() || !b.Dwell.Set() || e.Spotless() != nil {
-			return rule.Over("dwell and blur allowance are not both stated")
+		if why := noAllowance(e); why != "" {
+			return rule.Over(why)
+		}
+		if !b.Dwell.Set() {
+			return rule.Over("no dwell is stated")
 		}
 		f := rule.Finding{Rule: "beam.hum", Subject: "hum", Concern: rule.Performance, Relation: rule.AtMost, Place: b.Dwell.Place,
 			Under: string(evidence.Working), Sources: []rule.Source{slowSource}, Remedy: "screen the heater feed, balance its common mode, add capacitance at the cathode, or scan in step with the mains"}
@@ -107,8 +110,8 @@ field_width          = "1 mm"`}},
 	},
 	Judge: func(e *evidence.Evidence) rule.Judgement {
 		b := e.Chain().Beam
-		if b == nil || !b.BlurAllowance.Set() || e.Spotless() != nil {
-			return rule.Over("no blur allowance is stated")
+		if why := noAllowance(e); why != "" {
+			return rule.Over(why)
 		}
 		if _, err := e.Drifts(); err != nil {
 			return rule.Over(err.Error())

@@ -28,7 +28,10 @@ geometry = { aperture_radius = "0.5 mm", plate_thickness = "0.2 mm", tip_radius 
 	},
 	Judge: func(e *evidence.Evidence) rule.Judgement {
 		g := e.Chain().Gun
-		if !g.IsFitted() || g.Geometry == nil || e.DiodeGun() {
+		if why := noGun(e); why != "" {
+			return rule.Over(why)
+		}
+		if g.Geometry == nil || e.DiodeGun() {
 			return rule.Over("the gun has no bias, or its geometry is not described")
 		}
 		f := rule.Finding{Rule: "gun.cutoff", Subject: "gun", Concern: rule.Performance, Relation: rule.AtMost, Place: g.Geometry.Here(),
@@ -85,7 +88,10 @@ highest_resistance = "4 Mohm"`}},
 	},
 	Judge: func(e *evidence.Evidence) rule.Judgement {
 		b := e.Chain().Bias
-		if b == nil || !e.Chain().Gun.IsFitted() {
+		if why := noGun(e); why != "" {
+			return rule.Over(why)
+		}
+		if b == nil {
 			return rule.Over("there is no bias to adjust")
 		}
 		var all []rule.Finding
@@ -145,7 +151,10 @@ var regulating = rule.Rule{
 	},
 	Judge: func(e *evidence.Evidence) rule.Judgement {
 		c := e.Chain()
-		if !c.Gun.IsFitted() || c.Bias == nil || c.Bias.Kind.V != "self" {
+		if why := noGun(e); why != "" {
+			return rule.Over(why)
+		}
+		if c.Bias == nil || c.Bias.Kind.V != "self" {
 			return rule.Over("the gun is not self-biased")
 		}
 		if _, err := e.Cutoff(); err != nil {

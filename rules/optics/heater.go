@@ -23,12 +23,12 @@ var heaterBalance = rule.Rule{
 		Changes: []rule.Change{{Rule: "heater.balance", Subject: "heater", Verdict: rule.Fails}, {Rule: "beam.blur", Subject: "beam", Verdict: rule.Fails}, {Rule: "beam.disturbance", Subject: "cathode", Verdict: rule.Fails}, {Rule: "heater.hum", Subject: "cathode", Verdict: rule.Marginal}},
 	},
 	Judge: func(e *evidence.Evidence) rule.Judgement {
-		h, b := e.Chain().Heater, e.Chain().Beam
+		h := e.Chain().Heater
 		switch {
 		case h == nil || h.Supply.V != "ac":
 			return rule.Over("the heater is not fed with AC")
-		case b == nil || !b.BlurAllowance.Set() || e.Spotless() != nil:
-			return rule.Over("no blur allowance is stated")
+		case noAllowance(e) != "":
+			return rule.Over(noAllowance(e))
 		}
 		f := rule.Finding{Rule: "heater.balance", Subject: "heater", Concern: rule.Performance, Relation: rule.AtMost, Place: h.Supply.Place,
 			Under: string(evidence.Working), Sources: []rule.Source{balanceSource}, Remedy: "match the centre resistors, or heat with DC"}

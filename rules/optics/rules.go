@@ -27,14 +27,8 @@ var blur = rule.Rule{
 	},
 	Judge: func(e *evidence.Evidence) rule.Judgement {
 		b := e.Chain().Beam
-		if b == nil || !b.BlurAllowance.Set() {
-			return rule.Over("no blur allowance is stated")
-		}
-		if g := e.Chain().Gun; g != nil && !g.IsFitted() {
-			return rule.Over("the gun is not fitted")
-		}
-		if err := e.Spotless(); err != nil {
-			return rule.Over(err.Error())
+		if why := noAllowance(e); why != "" {
+			return rule.Over(why)
 		}
 		f := rule.Finding{Rule: "beam.blur", Subject: "beam", Concern: rule.Performance, Relation: rule.AtMost, Place: b.BlurAllowance.Place,
 			Under: string(evidence.Working), Sources: []rule.Source{blurSource}, Remedy: "see beam.ripple_allowed: more filtering, or less source width, angle or aberration"}
@@ -63,7 +57,10 @@ var emissionLaw = rule.Rule{
 	},
 	Judge: func(e *evidence.Evidence) rule.Judgement {
 		g := e.Chain().Gun
-		if !g.IsFitted() || !g.Emission.Set() || !g.Cutoff.Set() || !g.ZeroBiasEmission.Set() || e.Chain().Bias == nil {
+		if why := noGun(e); why != "" {
+			return rule.Over(why)
+		}
+		if !g.Emission.Set() || !g.Cutoff.Set() || !g.ZeroBiasEmission.Set() || e.Chain().Bias == nil {
 			return rule.Over("there is no emission to compare with a law")
 		}
 		f := rule.Finding{Rule: "gun.emission_law", Subject: "gun", Concern: rule.Performance, Relation: rule.AtMost, Place: g.Emission.Place,
@@ -93,7 +90,10 @@ var emissionLimit = rule.Rule{
 	},
 	Judge: func(e *evidence.Evidence) rule.Judgement {
 		g := e.Chain().Gun
-		if !g.IsFitted() || document.Need(g.EmittingArea, g.CathodeTemperature, g.WorkFunction) != nil {
+		if why := noGun(e); why != "" {
+			return rule.Over(why)
+		}
+		if document.Need(g.EmittingArea, g.CathodeTemperature, g.WorkFunction) != nil {
 			return rule.Over("the limit of the cathode is not described")
 		}
 		f := rule.Finding{Rule: "gun.emission_limit", Subject: "gun", Concern: rule.Performance, Relation: rule.AtMost, Place: g.EmittingArea.Place,

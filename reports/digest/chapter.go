@@ -100,7 +100,7 @@ func chapterOf(id string) exhibit.Chapter {
 		return exhibit.Beam
 	case "spacing", "vacuum", "field", "gap", "gas", "feedthrough":
 		return exhibit.Spacings
-	case "part", "divider", "rating", "cable", "feed", "resistor", "capacitor", "diode", "series", "arc":
+	case "part", "divider", "rating", "cable", "feed", "resistor", "capacitor", "diode", "series", "arc", "start":
 		return exhibit.Parts
 	case "stored", "access", "touch", "discharge", "rod", "xray", "bleeder", "protection":
 		return exhibit.Energy

@@ -2,6 +2,7 @@ package page
 
 import (
 	"fmt"
+	"slices"
 	"strings"
 
 	"kilovet/reports/digest"
@@ -13,7 +14,7 @@ import (
 // chapters is one section for each part of the chain that there is something to say of.
 func (n *writer) chapters() []Section {
 	var all []Section
-	for _, c := range n.parts {
+	for i, c := range n.parts {
 		var blocks []Block
 		if c.Of == exhibit.Chain {
 			blocks = append(blocks, n.schematic()...)
@@ -21,7 +22,7 @@ func (n *writer) chapters() []Section {
 		blocks = append(blocks, n.curves(c)...)
 		blocks = append(blocks, n.findings(c)...)
 		blocks = append(blocks, n.tables(c)...)
-		blocks = append(blocks, figures(c.Figures)...)
+		blocks = append(blocks, n.figures(n.laid[i])...)
 		if len(blocks) > 0 {
 			all = append(all, Section{Title: c.Title, Anchor: "chapter " + string(c.Of), Fresh: len(all) == 0, Blocks: blocks})
 		}
@@ -86,7 +87,7 @@ func (n *writer) flags(d *diagram.Diagram) Table {
 }
 
 // mostKeys is how many lines, levels and marks a curve of half the width may have.
-const mostKeys = 8
+const mostKeys = 12
 
 // curves is the pictures of a chapter.
 func (n *writer) curves(c digest.Chapter) []Block {
@@ -117,13 +118,23 @@ func caption(title, subject, basis, note string) string {
 	return text
 }
 
-// findings is the table of the findings of a chapter, the worst first.
+// findings is the findings of a chapter, the worst first: those that do not meet with
+// all that is said of them, then the others.
 func (n *writer) findings(c digest.Chapter) []Block {
-	if len(c.Findings) == 0 {
+	first := slices.IndexFunc(c.Findings, func(f rule.Finding) bool { return f.Verdict == rule.Meets })
+	if first < 0 {
+		first = len(c.Findings)
+	}
+	return append(n.standing(c, c.Findings[:first]), n.met(c, c.Findings[first:])...)
+}
+
+// standing is the table of findings that do not meet.
+func (n *writer) standing(c digest.Chapter, findings []rule.Finding) []Block {
+	if len(findings) == 0 {
 		return nil
 	}
-	t := Table{Title: "Findings", Columns: []Column{{Title: "Verdict", Share: 0.14}, {Title: "Rule and subject", Share: 0.25}, {Title: "Amounts", Share: 0.2}, {Title: "Reason and remedy", Share: 0.41}}}
-	for _, f := range c.Findings {
+	t := Table{Title: "Findings", Columns: []Column{{Title: "Verdict", Share: 0.125}, {Title: "Rule and subject", Share: 0.215}, {Title: "Amounts", Share: 0.16}, {Title: "Reason and remedy", Share: 0.5}}}
+	for _, f := range findings {
 		needed, provided := digest.Labels(f)
 		t.Rows = append(t.Rows, Row{Anchor: n.anchorOf(f), Cells: []Cell{
 			{Verdict: f.Verdict},
@@ -156,24 +167,32 @@ func (n *writer) tables(c digest.Chapter) []Block {
 		if t.Subject != "" {
 			title += ", " + t.Subject
 		}
-		out := Table{Title: title, Note: tableNote(t), Anchor: to, Columns: columns(t)}
-		rows, rest := t.Rows, 0
-		if len(rows) > longTable {
-			rows, rest = rows[:longTable], len(rows)-longTable
-		}
-		for _, row := range rows {
-			var cells []Cell
-			for i, cell := range row {
-				cells = append(cells, lines(plain(digest.Cell(t.Columns[i].Unit, cell.Value, cell.Text))))
-			}
-			out.Rows = append(out.Rows, Row{Cells: cells})
-		}
-		all = append(all, out)
+		rest := len(t.Rows) - longTable
+		t.Rows = t.Rows[:min(len(t.Rows), longTable)]
+		out, narrow := set(t)
+		out.Title, out.Note, out.Anchor = title, tableNote(t), to
 		if rest > 0 {
-			all = append(all, Paragraph{fmt.Sprintf("%d more rows of %s are in the JSON results and with --all.", rest, n.labels[to])})
+			out.Legend = append(out.Legend, plain(fmt.Sprintf("%d more rows of %s are in the JSON results and with --all.", rest, n.labels[to])))
 		}
+		all = append(all, sized{out, narrow})
 	}
-	return all
+	return paired(all)
+}
+
+// set is the columns and rows of a table, with its long texts that come again under it.
+func set(t exhibit.Table) (out Table, narrow bool) {
+	if t.Chapter != exhibit.Plan { // whose rows are read with hands busy
+		t, out.Legend = withLegend(t)
+	}
+	out.Columns, narrow = columns(t)
+	for _, row := range t.Rows {
+		var cells []Cell
+		for i, cell := range row {
+			cells = append(cells, lines(plain(digest.Cell(t.Columns[i].Unit, cell.Value, cell.Text))))
+		}
+		out.Rows = append(out.Rows, Row{Cells: cells})
+	}
+	return out, narrow
 }
 
 func tableNote(t exhibit.Table) string {

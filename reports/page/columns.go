@@ -10,40 +10,53 @@ import (
 )
 
 // want is how wide a column of a table is in runes: with its longest word or number
-// unbroken, and with its longest text on one line.
-type want struct{ least, whole int }
+// unbroken, and with its longest text on one line; and whether it holds numbers alone.
+type want struct {
+	least, whole int
+	number       bool
+}
 
 // Sizes of columns in runes.
 const (
 	longestWord = 16
 	longestText = 60
-	lineRunes   = 88 // of a whole line of a sheet
+	shortWords  = 9   // are not broken
+	lineRunes   = 112 // of a whole line of a sheet
+	halfRunes   = 54  // of a line of half the width
+
+	letter, digit = 8, 9 // how wide they are beside each other
 )
 
-// crowded is the part of a full line that goes to long texts all the same.
-const crowded = 0.3
-
-// columns shares the width of a table: each has room for its longest number or word,
-// and what is left goes to those with long texts.
-func columns(t exhibit.Table) []Column {
+// columns shares the width of a table, which may be half a line: each column has room
+// for its longest number or word, and what is left goes to those with long texts. Where
+// even that is too much, numbers stay whole and words break.
+func columns(t exhibit.Table) (all []Column, narrow bool) {
 	wants := make([]want, len(t.Columns))
-	least, whole := 0, 0
+	least, whole, folded := 0, 0, 0
 	for i := range t.Columns {
-		wants[i] = wanted(t, i)
-		least, whole = least+wants[i].least, whole+wants[i].whole
+		w := wanted(t, i)
+		least, whole, folded = least+w.least, whole+w.whole, folded+max(w.least, w.whole*85/100)
+		wants[i] = w
 	}
-	var all []Column
+	line := lineRunes
+	if folded <= halfRunes {
+		line, narrow = halfRunes, true
+	}
+	spare := line - least
 	for i, c := range t.Columns {
-		share := float64(wants[i].whole) / float64(whole)
-		switch spare := lineRunes - least; {
-		case whole > lineRunes && float64(spare) < crowded*lineRunes: // too many columns: none starves
-			share = (1-crowded)*float64(wants[i].least)/float64(least) + crowded*float64(wants[i].whole-wants[i].least)/float64(max(1, whole-least))
-		case whole > lineRunes:
-			share = (float64(wants[i].least) + float64(spare)*float64(wants[i].whole-wants[i].least)/float64(max(1, whole-least))) / lineRunes
+		w := wants[i]
+		share := float64(w.whole)
+		switch {
+		case whole > line && spare <= 0 && w.number:
+			share = 1.3 * float64(w.least)
+		case whole > line && spare <= 0:
+			share = max(0.6*float64(w.least)+0.2*float64(w.whole), float64(min(w.whole, shortWords)))
+		case whole > line:
+			share = float64(w.least) + float64(spare)*float64(w.whole-w.least)/float64(max(1, whole-least))
 		}
-		all = append(all, Column{Title: c.Head, Share: share, Right: c.Unit != "" && !holdsWords(t, i)})
+		all = append(all, Column{Title: c.Head, Share: share, Right: w.number})
 	}
-	return summing(all)
+	return summing(all), narrow
 }
 
 // summing lets shares sum to one.
@@ -59,17 +72,17 @@ func summing(all []Column) []Column {
 }
 
 func wanted(t exhibit.Table, i int) want {
-	w := want{least: longest(t.Columns[i].Head), whole: min(utf8.RuneCountInString(t.Columns[i].Head), longestWord)}
+	w := want{least: longest(t.Columns[i].Head), whole: longest(t.Columns[i].Head)}
 	for _, row := range t.Rows {
 		text := digest.Cell(t.Columns[i].Unit, row[i].Value, row[i].Text)
 		n := utf8.RuneCountInString(text)
-		w.whole = max(w.whole, min(n, longestText))
-		if row[i].Value != nil {
-			w.least = max(w.least, n)
+		if row[i].Value != nil || n <= shortWords {
+			w.least, w.whole = max(w.least, n), max(w.whole, n)
 		} else {
-			w.least = max(w.least, longest(text))
+			w.least, w.whole = max(w.least, longest(text)), max(w.whole, min(n*letter/digit, longestText))
 		}
 	}
+	w.number = t.Columns[i].Unit != "" && !holdsWords(t, i)
 	w.least += 2 // and the space beside it
 	w.whole = max(w.whole+2, w.least)
 	return w

@@ -32,8 +32,8 @@ type Section struct {
 	Anchor string // what links lead to
 }
 
-// Block is one piece of a section: Banner, Notice, Paragraph, Facts, Table, Gallery,
-// Contents or Signatures.
+// Block is one piece of a section: Banner, Notice, Paragraph, Facts, Table, Halves,
+// Gallery, Contents or Signatures.
 type Block interface{ block() }
 
 // Banner is the verdict of the whole review.
@@ -62,8 +62,13 @@ type Table struct {
 	Anchor  string // what links lead to
 	Columns []Column
 	Rows    []Row
-	Fill    bool // ends with the sheet it stands on; Rest counts the rows left out
+	Fill    bool   // ends with the sheet it stands on; Rest counts the rows left out
+	Legend  []Line // stands under it
 }
+
+// Halves is pieces that half the width is enough for, in two columns: down the first,
+// then down the second.
+type Halves struct{ Blocks []Block }
 
 // Gallery is pictures, side by side where they are narrow.
 type Gallery struct{ Figures []Figure }
@@ -85,6 +90,7 @@ type Entry struct{ Title, Anchor string }
 
 // Column is a title and a share of the width.
 type Column struct {
+	Over  string // stands above the titles of all columns beside each other that have it
 	Title string
 	Share float64
 	Right bool // numbers stand to the right
@@ -138,6 +144,7 @@ func (Notice) block()     {}
 func (Paragraph) block()  {}
 func (Facts) block()      {}
 func (Table) block()      {}
+func (Halves) block()     {}
 func (Gallery) block()    {}
 func (Contents) block()   {}
 func (Signatures) block() {}

@@ -1,34 +1,36 @@
 package page
 
 import (
+	"cmp"
 	"slices"
 
 	"kilovet/reports/digest"
 	"kilovet/rules"
-	"kilovet/rules/figure"
 	"kilovet/rules/rule"
 )
 
-// figures is the tables of the figures of a chapter: those that depend on the state, and
-// the others. Rows of parts that are nought throughout are left out, and that is said.
-func figures(all []figure.Figure) []Block {
+// figures is the tables of the figures of a chapter: matrices of those of several
+// subjects, those that depend on the state, and the others. Rows of parts that are nought
+// throughout are left out, and that is said.
+func (n *writer) figures(l laid) []Block {
 	var blocks []Block
-	states := digest.States(all)
-	if groups := telling(digest.ByState(all, states)); len(groups) > 0 {
-		t := figureTable(groups, states)
-		t.Title = "Figures by state"
-		blocks = append(blocks, t)
+	for _, m := range l.matrices {
+		blocks = append(blocks, sized{m.table(l.states), m.narrow()})
 	}
-	fams, groups := families(telling(digest.Stateless(all)))
-	for _, f := range fams {
-		blocks = append(blocks, f.table())
+	if len(l.alike) > 0 {
+		blocks = append(blocks, sized{figureTable("Figures that are the same for several", l.alike, l.states), false})
 	}
-	if len(groups) > 0 {
-		t := figureTable(groups, []string{"value"})
-		t.Title = "Figures"
-		blocks = append(blocks, t)
+	if len(l.byState) > 0 {
+		blocks = append(blocks, sized{figureTable("Figures by state", l.byState, l.states), false})
 	}
-	if silent(all, states) {
+	if len(l.others) > 0 {
+		blocks = append(blocks, sized{figureTable("Figures", l.others, l.states), false})
+	}
+	blocks = paired(blocks)
+	if len(l.told) > 0 {
+		blocks = append(blocks, n.toldTable(l.told))
+	}
+	if l.silent {
 		blocks = append(blocks, Paragraph{"Nodes and parts at which a figure is nought in every state are left out here; the JSON results list them."})
 	}
 	return blocks
@@ -46,31 +48,41 @@ func telling(groups []digest.Group) []digest.Group {
 	return kept
 }
 
-func silent(figures []figure.Figure, states []string) bool {
-	return slices.ContainsFunc(append(digest.ByState(figures, states), digest.Stateless(figures)...), func(g digest.Group) bool {
-		return slices.ContainsFunc(g.Rows, digest.Row.Silent)
-	})
-}
-
-func figureTable(groups []digest.Group, columns []string) Table {
-	share := min(0.15, 0.6/float64(len(columns)))
-	t := Table{Columns: []Column{{Title: "Figure and subject", Share: 1 - share*float64(len(columns))}}}
-	for _, c := range columns {
-		t.Columns = append(t.Columns, Column{Title: c, Share: share, Right: true})
+// figureTable lists figures: what each is, and its value in each state that any has one
+// in.
+func figureTable(title string, groups []digest.Group, states []string) Table {
+	var used []int
+	for i := range states {
+		if slices.ContainsFunc(groups, func(g digest.Group) bool { return slices.Contains(statesOf(g), i) }) {
+			used = append(used, i)
+		}
+	}
+	share := min(0.095, 0.5/float64(len(used)))
+	t := Table{Title: title, Columns: []Column{{Title: "Figure", Share: 0.235}, {Title: "What it is; what computed it", Share: 0.765 - share*float64(len(used))}}}
+	for _, s := range used {
+		t.Columns = append(t.Columns, Column{Title: cmp.Or(states[s], "value"), Share: share, Right: true})
 	}
 	for _, g := range groups {
-		if len(g.Rows) == 1 {
-			only := valueRow(g.Rows[0], strong(g.ID), plain(g.Rows[0].Part()), small(meaning(g)))
-			only.Anchor = anchor("figure", g.ID, g.Rows[0].Part())
-			t.Rows = append(t.Rows, only)
-			continue
-		}
-		t.Rows = append(t.Rows, Row{Group: true, Cells: []Cell{lines(strong(g.ID), small(meaning(g)))}})
 		for _, row := range g.Rows {
-			under := valueRow(row, plain(row.Subject))
-			under.Under, under.Anchor = true, anchor("figure", g.ID, row.Part())
-			t.Rows = append(t.Rows, under)
+			out := Row{Anchor: anchor("figure", g.ID, row.Part()), Cells: []Cell{lines(strong(g.ID), plain(row.Part())), lines(small(meaning(g)))}}
+			for _, s := range used {
+				out.Cells = append(out.Cells, lines(plain(row.Values[s])))
+			}
+			t.Rows = append(t.Rows, out)
 		}
+	}
+	return t
+}
+
+// toldTable names the figures that tables show, and those tables.
+func (n *writer) toldTable(all []told) Table {
+	t := Table{Title: "Figures shown in tables", Columns: []Column{{Title: "Figure", Share: 0.24}, {Title: "What it is; what computed it", Share: 0.56}, {Title: "Shown in", Share: 0.2}}}
+	for _, f := range all {
+		in := plain("")
+		for _, to := range f.tables {
+			in = joined(in, Line{Text: n.labels[to], Links: []Link{{n.labels[to], to}}})
+		}
+		t.Rows = append(t.Rows, Row{Cells: []Cell{lines(strong(f.ID)), lines(small(meaning(f.Group))), lines(in)}})
 	}
 	return t
 }
@@ -80,15 +92,7 @@ func meaning(g digest.Group) string {
 	if g.Basis == "" {
 		return g.What
 	}
-	return g.What + "; basis: " + g.Basis
-}
-
-func valueRow(row digest.Row, first ...Line) Row {
-	cells := []Cell{lines(first...)}
-	for _, v := range row.Values {
-		cells = append(cells, lines(plain(v)))
-	}
-	return Row{Cells: cells}
+	return g.What + "; " + g.Basis
 }
 
 // remarks is what stands beside the findings: assumptions, cautions, rules that
@@ -103,7 +107,7 @@ func (n *writer) remarks() []Section {
 	}
 	add("Assumptions", "assumptions", paragraphs(r.Assumptions))
 	add("Cautions", "cautions", factsOf(r.Cautions, func(c rule.Caution) Fact { return Fact{c.Subject, c.Text} }))
-	add("Rules passed over", "passed-over", factsOf(r.PassedOver, func(p rule.PassedOver) Fact { return Fact{p.Rule, p.Because} }))
+	add("Rules passed over", "passed-over", halved(factsOf(r.PassedOver, func(p rule.PassedOver) Fact { return Fact{p.Rule, p.Because} })))
 	add("Sources", "sources", n.sourceTable())
 	return sections
 }
@@ -113,11 +117,11 @@ func (n *writer) sourceTable() []Block {
 	if len(n.sources) == 0 {
 		return nil
 	}
-	t := Table{Columns: []Column{{Title: "No.", Share: 0.08}, {Title: "Source", Share: 0.67}, {Title: "How it is known", Share: 0.25}}}
+	t := Table{Columns: []Column{{Title: "No.", Share: 0.1}, {Title: "Source, and how it is known", Share: 0.9}}}
 	for i, s := range n.sources {
-		t.Rows = append(t.Rows, Row{Anchor: sourceAnchor(i + 1), Cells: []Cell{lines(plain(sourceWord(i + 1))), lines(plain(s.Text)), lines(plain(digest.Known(s)))}})
+		t.Rows = append(t.Rows, Row{Anchor: sourceAnchor(i + 1), Cells: []Cell{lines(plain(sourceWord(i + 1))), lines(plain(s.Text + " (" + digest.Known(s) + ")"))}})
 	}
-	return []Block{t}
+	return halved([]Block{t})
 }
 
 func paragraphs(texts []string) []Block {

@@ -18,19 +18,57 @@ type writer struct {
 	sources []rule.Source
 	labels  map[string]string // of figures and tables, by anchor
 	anchors map[about]string  // of findings
-	beside  map[string]bool   // ids of figures set beside others of their family
+	laid    []laid            // the figures of each part
+	places  map[place]string  // anchors of figures
 }
+
+// place is a figure of a subject.
+type place struct{ id, subject string }
 
 // about is what a finding speaks of.
 type about struct{ rule, subject string }
 
 func newWriter(r *rules.Review) *writer {
-	n := &writer{review: r, parts: digest.Chapters(r), sources: digest.Sources(r), labels: map[string]string{}, anchors: map[about]string{}, beside: besides(r.Figures)}
+	n := &writer{review: r, parts: digest.Chapters(r), sources: digest.Sources(r), labels: map[string]string{}, anchors: map[about]string{}, places: map[place]string{}}
 	for i, f := range digest.Sorted(r.Findings) {
 		n.anchors[about{f.Rule, f.Subject}] = fmt.Sprintf("finding-%d", i+1)
 	}
+	for _, c := range n.parts {
+		n.lay(c, layFigures(c))
+	}
 	n.number()
 	return n
+}
+
+// lay keeps the figures of a part and where each of them stands.
+func (n *writer) lay(c digest.Chapter, l laid) {
+	n.laid = append(n.laid, l)
+	for _, t := range l.told {
+		for _, r := range t.Rows {
+			n.places[place{t.ID, r.Part()}] = t.tables[0]
+		}
+	}
+	for _, g := range l.alike {
+		for _, f := range c.Figures {
+			if f.ID == g.ID {
+				n.places[place{f.ID, f.Subject}] = anchor("figure", g.ID, g.Rows[0].Part())
+			}
+		}
+	}
+	for _, g := range append(slices.Clone(l.byState), l.others...) {
+		for _, r := range g.Rows {
+			n.places[place{g.ID, r.Part()}] = anchor("figure", g.ID, r.Part())
+		}
+	}
+	for _, m := range l.matrices {
+		for _, r := range m.folded() {
+			for _, g := range m.groups {
+				for _, s := range r.subjects {
+					n.places[place{g.ID, digest.Row{Subject: s}.Part()}] = m.anchor(r.subjects[0])
+				}
+			}
+		}
+	}
 }
 
 func (n *writer) anchorOf(f rule.Finding) string { return n.anchors[about{f.Rule, f.Subject}] }
@@ -111,13 +149,12 @@ func (n *writer) seenLine(c digest.Chapter, f rule.Finding) Line {
 			see(n.labels[to], to)
 		}
 	}
+	var seen []string
 	for _, fig := range nearest(c.Figures, f) {
-		family, _, _ := strings.Cut(fig.ID, ".")
-		if n.beside[fig.ID] {
-			see("figures", anchor("figures", family, fig.Subject))
-			break
+		if to := n.places[place{fig.ID, fig.Subject}]; to != "" && !slices.Contains(seen, to) {
+			see(fig.ID, to)
+			seen = append(seen, to)
 		}
-		see(fig.ID, anchor("figure", fig.ID, fig.Subject))
 	}
 	if len(words) == 0 {
 		return small("")

@@ -32,9 +32,11 @@ func (w *flow) tag(x, y, width float64, v rule.Verdict) {
 	w.centred(x, y+tagHeight*0.5+tag.size*points*0.27, width, w.fit(tag, strings.ToUpper(string(v)), width-2, 1), white)
 }
 
+// centred sets lines in the middle of a width, the first on a base line.
 func (w *flow) centred(x, baseline, width float64, lines []set, white bool) {
 	for _, l := range lines {
 		w.sheet().add(written{x: x + (width-w.width(l.style, l.text))/2, y: baseline, set: l, white: white})
+		baseline += l.style.leading()
 	}
 }
 
@@ -54,18 +56,18 @@ func (w *flow) banner(b page.Banner) {
 // notice is a paragraph with a bar at its side.
 func (w *flow) notice(b page.Notice) {
 	w.gap(2)
-	w.row(row{bar: true, pad: 1, cells: []rowCell{{x: w.left + 3, width: w.across - 3, lines: w.wrap(body, b.Text, w.across-3)}}})
+	w.row(row{bar: true, pad: 1, cells: []rowCell{{x: 3, width: w.across - 3, lines: w.wrap(body, b.Text, w.across-3)}}})
 	w.y += 2
 }
 
 // facts is labels in a column and their texts beside them.
 func (w *flow) facts(b page.Facts) {
-	const wide = 40.0
+	wide := min(40, w.across*0.36)
 	w.gap(2)
 	for _, f := range b.Facts {
-		w.row(row{pad: 0.7, ruled: true, cells: []rowCell{
-			{x: w.left, width: wide, lines: w.wrap(strong, f.Label, wide-3)},
-			{x: w.left + wide, width: w.across - wide, lines: w.wrap(body, f.Text, w.across-wide)},
+		w.row(row{pad: 0.6, ruled: true, cells: []rowCell{
+			{width: wide, lines: w.wrap(strong, f.Label, wide-3)},
+			{x: wide, width: w.across - wide, lines: w.wrap(body, f.Text, w.across-wide)},
 		}})
 	}
 }

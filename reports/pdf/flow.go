@@ -14,6 +14,8 @@ type flow struct {
 	y       float64
 	anchors map[string]spot
 	drawn   map[asked]framed
+	halves  *halves       // while pieces stand in two columns
+	waiting []page.Figure // for the next sheet
 }
 
 // spot is where links lead.
@@ -47,10 +49,14 @@ func layout(f *fonts, a area, pen *drawing.Pen, d *page.Document) *flow {
 	return w
 }
 
-// turn begins a new sheet.
+// turn begins a new sheet, or the second column of this one.
 func (w *flow) turn() {
+	if w.halves != nil && w.halves.turn(w) {
+		return
+	}
 	w.sheets = append(w.sheets, &sheet{})
 	w.y = w.top
+	w.show()
 }
 
 func (w *flow) sheet() *sheet { return w.sheets[len(w.sheets)-1] }
@@ -78,11 +84,11 @@ func (w *flow) section(s page.Section) {
 	if s.Fresh && !w.fresh() || s.Whole && !w.holds(s) {
 		w.turn()
 	}
-	w.gap(8)
+	w.gap(6)
 	lines := append(w.wrap(strong, s.Lead, w.across), w.wrap(heading, s.Title, w.across)...)
 	w.room(min(height(lines)+w.first(s.Blocks), w.bottom-w.top-1))
 	if !w.fresh() {
-		w.sheet().add(stroke{w.left, w.y - 3, w.right, w.y - 3, 0.5, 0})
+		w.sheet().add(stroke{w.left, w.y - 2.5, w.right, w.y - 2.5, 0.5, 0})
 	}
 	w.anchor(s.Anchor, w.y)
 	w.sheet().add(bookmark{w.guard(regular, s.Title), w.y})
@@ -94,6 +100,9 @@ func (w *flow) section(s page.Section) {
 		}
 		w.block(b)
 	}
+	for len(w.waiting) > 0 {
+		w.turn()
+	}
 }
 
 // first is how much must follow a heading on the same sheet.
@@ -102,7 +111,13 @@ func (w *flow) first(blocks []page.Block) float64 {
 		return 0
 	}
 	if g, ok := blocks[0].(page.Gallery); ok && len(g.Figures) > 0 {
-		return w.firstRow(g) + 4
+		if high := w.firstRow(g) + 4; len(blocks) == 1 || w.y+high+keep < w.bottom || w.fresh() {
+			return high
+		}
+		return w.first(blocks[1:])
+	}
+	if _, ok := blocks[0].(page.Halves); ok {
+		return keep + 4
 	}
 	if t, ok := blocks[0].(page.Table); ok && len(t.Rows) > 0 && !t.Fill {
 		return min(w.tableStart(t)+6, (w.bottom-w.top)/3)
@@ -138,11 +153,13 @@ func (w *flow) block(b page.Block) {
 		w.notice(b)
 	case page.Paragraph:
 		w.gap(1.5)
-		w.row(row{cells: []rowCell{{x: w.left, width: w.across, lines: w.wrap(body, b.Text, w.across)}}})
+		w.row(row{cells: []rowCell{{width: w.across, lines: w.wrap(body, b.Text, w.across)}}})
 	case page.Facts:
 		w.facts(b)
 	case page.Table:
 		w.table(b)
+	case page.Halves:
+		w.inHalves(b)
 	case page.Gallery:
 		w.gallery(b)
 	case page.Contents:

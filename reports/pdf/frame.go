@@ -17,9 +17,8 @@ type field struct {
 func (w *flow) frame(s *sheet, b page.TitleBlock, n, of int) {
 	s.add(box{x: w.frameLeft, y: w.frameTop, w: w.frameRight - w.frameLeft, h: w.frameBottom - w.frameTop, width: 0.5})
 	rows := [][]field{
-		{{"Legal owner", b.Owner, 0.33}, {"Title", b.Title, 0.67}},
-		{{"Creator", b.Creator, 0.28}, {"Approval person", b.Approver, 0.28}, {"Document type", b.DocumentType, 0.24}, {"Date of issue", b.Date, 0.2}},
-		{{"Identification number", b.Document, 0.4}, {"Revision index", b.Revision, 0.16}, {"Made by", b.Program, 0.24}, {"Sheet", fmt.Sprintf("%d of %d", n, of), 0.2}},
+		{{"Legal owner", b.Owner, 0.25}, {"Title", b.Title, 0.46}, {"Document type", b.DocumentType, 0.29}},
+		{{"Identification number", b.Document, 0.19}, {"Revision index", b.Revision, 0.1}, {"Creator", b.Creator, 0.17}, {"Approval person", b.Approver, 0.17}, {"Date of issue", b.Date, 0.13}, {"Made by", b.Program, 0.14}, {"Sheet", fmt.Sprintf("%d of %d", n, of), 0.1}},
 	}
 	high := blockHeight / float64(len(rows))
 	for i, fields := range rows {
@@ -40,10 +39,10 @@ func (w *flow) field(s *sheet, d field, x, y, wide, high float64) {
 	if x > w.frameLeft {
 		s.add(stroke{x, y, x, y + high, 0.15, 0})
 	}
-	s.lines(x+1.2, y+0.6, w.fit(label, d.label, wide-2.4, 1))
+	s.lines(x+1.2, y+0.4, w.fit(label, d.label, wide-2.4, 1))
 	lines := w.wrap(body, d.text, wide-2.4)
 	if len(lines) > 1 {
 		lines = w.fit(small, d.text, wide-2.4, 2)
 	}
-	s.lines(x+1.2, y+3.4, lines)
+	s.lines(x+1.2, y+3, lines)
 }

@@ -26,12 +26,23 @@ type framed struct {
 
 func (f framed) tall() float64 { return f.height + captionGap + height(f.caption) }
 
-// gallery sets figures under each other, two beside each other where they are narrow.
+// gallery sets figures under each other, two beside each other where they are narrow;
+// those that this sheet has no room for wait for the next, and what follows them goes on
+// here.
 func (w *flow) gallery(g page.Gallery) {
-	for rest := g.Figures; len(rest) > 0; {
-		row := w.nextRow(rest)
+	w.waiting = append(w.waiting, g.Figures...)
+	w.show()
+}
+
+// show sets waiting figures as far as they reach.
+func (w *flow) show() {
+	for len(w.waiting) > 0 {
+		row := w.nextRow(w.waiting)
+		if w.y+3+tallest(row) > w.bottom && !w.fresh() {
+			return
+		}
+		w.waiting = w.waiting[len(row):]
 		w.figures(row...)
-		rest = rest[len(row):]
 	}
 }
 
@@ -67,7 +78,7 @@ func (w *flow) lone(f page.Figure) float64 {
 // figures places figures beside each other, all on one sheet.
 func (w *flow) figures(all ...framed) {
 	most := tallest(all)
-	w.gap(3)
+	w.gap(2.5)
 	w.room(most)
 	x := w.left
 	for _, f := range all {

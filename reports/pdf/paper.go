@@ -21,7 +21,7 @@ func (p Paper) size() (width, height float64) {
 }
 
 // blockHeight is that of the title block.
-const blockHeight = 30.0
+const blockHeight = 17.0
 
 // area is where things stand on a sheet, in millimetres from its top left.
 type area struct {
@@ -34,8 +34,8 @@ type area struct {
 func (p Paper) area() area {
 	width, height := p.size()
 	a := area{frameLeft: 20, frameRight: width - 10, frameTop: 10, frameBottom: height - 10}
-	a.left, a.right = a.frameLeft+5, a.frameRight-5
-	a.top, a.bottom = a.frameTop+6, a.frameBottom-blockHeight-4
+	a.left, a.right = a.frameLeft+3, a.frameRight-3
+	a.top, a.bottom = a.frameTop+4, a.frameBottom-blockHeight-2.5
 	a.across = a.right - a.left
 	return a
 }

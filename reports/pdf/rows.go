@@ -13,7 +13,8 @@ type row struct {
 	to    string  // what links lead to
 }
 
-// rowCell is lines of text, or a verdict, in its place.
+// rowCell is lines of text, or a verdict, in its place, from the left of the column it
+// is set in.
 type rowCell struct {
 	x, width float64
 	lines    []set
@@ -22,7 +23,7 @@ type rowCell struct {
 }
 
 // tagHeight is the height a verdict takes in a row.
-const tagHeight = 5.2
+const tagHeight = 4.6
 
 func (c rowCell) height() float64 {
 	if c.verdict != "" {
@@ -109,9 +110,10 @@ func (w *flow) place(r row) {
 	s := w.sheet()
 	w.anchor(r.to, w.y)
 	for _, c := range r.cells {
+		c.x += w.left
 		switch {
 		case c.verdict != "":
-			w.tag(c.x, w.y+r.pad, min(c.width, 24), c.verdict)
+			w.tag(c.x, w.y+r.pad, min(c.width, 20), c.verdict)
 		case c.right:
 			w.rightward(c, w.y+r.pad)
 		default:

@@ -7,20 +7,25 @@ import (
 )
 
 // gutter is the space between columns, in millimetres.
-const gutter = 2.5
+const gutter = 2.0
 
 // table sets a table; its column titles stand again on every sheet it goes on to.
 func (w *flow) table(t page.Table) {
 	if len(t.Rows) == 0 {
 		return
 	}
-	w.gap(3)
+	w.gap(2.5)
 	head := func() { w.head(t.Columns) }
 	rows := w.tableRows(t, head)
 	title := append(w.wrap(strong, t.Title, w.across), w.wrap(small, t.Note, w.across)...)
-	w.room(min(height(title)+11+together(rows, 0), w.bottom-w.top-keep))
+	start := height(title) + 2 + w.headTall(t.Columns)
+	if all := start + total(rows); all <= wholeTable {
+		w.room(all)
+	} else {
+		w.room(min(start+max(together(rows, 0), min(total(rows[:min(3, len(rows))]), startOfTable)), w.bottom-w.top-keep))
+	}
 	w.anchor(t.Anchor, w.y)
-	w.row(row{cells: []rowCell{{x: w.left, width: w.across, lines: title}}})
+	w.row(row{cells: []rowCell{{width: w.across, lines: title}}})
 	if len(title) > 0 {
 		w.y += 1
 	}
@@ -29,7 +34,29 @@ func (w *flow) table(t page.Table) {
 		w.begin(r, min(together(rows, i), w.bottom-w.top-keep))
 		w.row(r)
 	}
+	w.legend(t.Legend)
 	w.y += 1
+}
+
+// wholeTable is up to what height a table stands on one sheet, in millimetres.
+const wholeTable = 45.0
+
+// startOfTable is how much of a long table should follow its title, in millimetres.
+const startOfTable = 20.0
+
+func total(rows []row) float64 {
+	sum := 0.0
+	for _, r := range rows {
+		sum += r.height()
+	}
+	return sum
+}
+
+// legend is what stands under a table.
+func (w *flow) legend(lines []page.Line) {
+	for _, l := range lines {
+		w.row(row{pad: 0.3, cells: []rowCell{{width: w.across, lines: w.cell([]page.Line{l}, w.across)}}})
+	}
 }
 
 // tableStart is the height of what must stay together at the beginning of a table:
@@ -37,7 +64,7 @@ func (w *flow) table(t page.Table) {
 func (w *flow) tableStart(t page.Table) float64 {
 	title := append(w.wrap(strong, t.Title, w.across), w.wrap(small, t.Note, w.across)...)
 	t.Rows = t.Rows[:min(2, len(t.Rows))]
-	return height(title) + 11 + together(w.tableRows(t, func() {}), 0)
+	return height(title) + 2 + w.headTall(t.Columns) + together(w.tableRows(t, func() {}), 0)
 }
 
 // filled is the table cut to the rows that the sheet holds beside what follows it, at
@@ -63,25 +90,71 @@ func (w *flow) filled(t page.Table, after float64) page.Table {
 	return t
 }
 
+// headLines is how many lines the title of a column may take.
+const headLines = 4
+
 // headTall is what the titles of these columns take.
 func (w *flow) headTall(columns []page.Column) float64 {
 	most := 0.0
 	for _, c := range columns {
-		most = max(most, height(w.fit(column, c.Title, c.Share*w.across-gutter, 2)))
+		most = max(most, height(w.fit(column, c.Title, c.Share*w.across-gutter, headLines)))
 	}
-	return most + 2
+	return most + 2 + w.overTall(columns)
+}
+
+// overTall is what stands above the titles of the columns takes.
+func (w *flow) overTall(columns []page.Column) float64 {
+	most := 0.0
+	for _, o := range w.overs(columns) {
+		most = max(most, height(o.lines)+1)
+	}
+	return most
+}
+
+// over is a title that spans columns beside each other.
+type over struct {
+	x, width float64
+	lines    []set
+}
+
+func (w *flow) overs(columns []page.Column) []over {
+	var all []over
+	x := 0.0
+	for i, c := range columns {
+		wide := c.Share * w.across
+		switch {
+		case c.Over == "":
+		case i > 0 && columns[i-1].Over == c.Over:
+			all[len(all)-1].width += wide
+		default:
+			all = append(all, over{x: x, width: wide - gutter})
+			all[len(all)-1].lines = []set{{text: c.Over}}
+		}
+		x += wide
+	}
+	for i := range all {
+		all[i].lines = w.fit(column, all[i].lines[0].text, all[i].width, 2)
+	}
+	return all
 }
 
 // headHeight is the most that the titles of the columns take.
-const headHeight = 9.0
+const headHeight = 16.0
 
 // head is the titles of the columns between two lines.
 func (w *flow) head(columns []page.Column) {
 	w.sheet().add(stroke{w.left, w.y, w.right, w.y, 0.35, 0})
+	tall := w.overTall(columns)
+	for _, o := range w.overs(columns) {
+		x := w.left + o.x
+		w.centred(x, w.y+tall-height(o.lines)-0.4+column.size*points, o.width, o.lines, false)
+		w.sheet().add(stroke{x + 1, w.y + tall, x + o.width, w.y + tall, 0.15, 0})
+	}
+	w.y += tall
 	titles := row{pad: 1}
-	x := w.left
+	x := 0.0
 	for _, c := range columns {
-		titles.cells = append(titles.cells, rowCell{x: x, width: c.Share*w.across - gutter, lines: w.fit(column, c.Title, c.Share*w.across-gutter, 2), right: c.Right})
+		titles.cells = append(titles.cells, rowCell{x: x, width: c.Share*w.across - gutter, lines: w.fit(column, c.Title, c.Share*w.across-gutter, headLines), right: c.Right})
 		x += c.Share * w.across
 	}
 	w.place(titles)
@@ -95,7 +168,8 @@ func (w *flow) tableRows(t page.Table, head func()) []row {
 	var group row
 	for i, r := range t.Rows {
 		alone := i+1 == len(t.Rows) || !t.Rows[i+1].Under
-		set := row{cells: w.tableCells(t.Columns, r), pad: padding(r), ruled: !r.Group || alone, again: head, group: r.Group, to: r.Anchor}
+		cells := w.tableCells(t.Columns, r)
+		set := row{cells: cells, pad: padding(r, cells), ruled: !r.Group || alone, again: head, group: r.Group, to: r.Anchor}
 		if r.Group {
 			group = set
 		}
@@ -107,20 +181,20 @@ func (w *flow) tableRows(t page.Table, head func()) []row {
 	return rows
 }
 
-// padding sets rows that belong together closer.
-func padding(r page.Row) float64 {
-	if r.Under {
-		return 0.35
+// padding sets rows of one line, and rows that belong together, closer.
+func padding(r page.Row, cells []rowCell) float64 {
+	if r.Under || !slices.ContainsFunc(cells, func(c rowCell) bool { return len(c.lines) > 1 || c.verdict != "" }) {
+		return 0.25
 	}
-	return 0.7
+	return 0.5
 }
 
 func (w *flow) tableCells(columns []page.Column, r page.Row) []rowCell {
 	if r.Group {
-		return []rowCell{{x: w.left, width: w.across, lines: w.cell(r.Cells[0].Lines, w.across)}}
+		return []rowCell{{width: w.across, lines: w.cell(r.Cells[0].Lines, w.across)}}
 	}
 	var cells []rowCell
-	x := w.left
+	x := 0.0
 	for i, c := range r.Cells {
 		wide := columns[i].Share*w.across - gutter
 		cells = append(cells, rowCell{x: x, width: wide, lines: w.cell(c.Lines, wide), right: columns[i].Right, verdict: c.Verdict})

@@ -14,28 +14,31 @@ type style struct {
 
 // The styles of the sheets.
 var (
-	body    = style{regular, 8}
-	strong  = style{bold, 8}
-	small   = style{regular, 6.5}
-	heading = style{bold, 12}
-	column  = style{bold, 7}
-	tag     = style{bold, 6.5}
-	word    = style{bold, 17}
-	answer  = style{bold, 10.5}
-	label   = style{regular, 5.5}
+	body         = style{regular, 7.5}
+	strong       = style{bold, 7.5}
+	inCell       = style{regular, 7}
+	strongInCell = style{bold, 7}
+	small        = style{regular, 6}
+	heading      = style{bold, 12}
+	column       = style{bold, 6.5}
+	tag          = style{bold, 6.2}
+	word         = style{bold, 17}
+	answer       = style{bold, 10.5}
+	label        = style{regular, 5}
 )
 
 // leading is the distance of two base lines, in millimetres.
-func (t style) leading() float64 { return t.size * points * 1.32 }
+func (t style) leading() float64 { return t.size * points * 1.26 }
 
+// styleOf is the style of a line in a table.
 func styleOf(w page.Weight) style {
 	switch w {
 	case page.Strong:
-		return strong
+		return strongInCell
 	case page.Small:
 		return small
 	}
-	return body
+	return inCell
 }
 
 // set is one line of text, ready to be placed.

@@ -25,7 +25,7 @@ func FieldPeak(g gap.Gap, v gap.Voltages) (gap.Answer[quantity.Field], error) {
 		Sources: []gap.Source{{Text: "electrostatics of the ideal shape", Mark: gap.Derived, Governs: true}},
 	}
 	if l.Bound() {
-		a.Because += "; an upper bound, that of a full cylinder of the same radius"
+		a.Because += "; an upper bound for an edge that runs straight, that of a full cylinder of the same radius"
 	}
 	return a, nil
 }

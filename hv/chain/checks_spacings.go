@@ -69,7 +69,8 @@ type size struct {
 }
 
 func (sh *Shape) sizes() []size {
-	return []size{{"inner_radius", sh.InnerRadius}, {"outer_radius", sh.OuterRadius}, {"radius", sh.Radius}, {"tip_radius", sh.TipRadius}, {"edge_radius", sh.EdgeRadius}}
+	return []size{{"inner_radius", sh.InnerRadius}, {"outer_radius", sh.OuterRadius}, {"radius", sh.Radius}, {"tip_radius", sh.TipRadius}, {"edge_radius", sh.EdgeRadius},
+		{"body_radius", sh.BodyRadius}, {"wall_radius", sh.WallRadius}}
 }
 
 // sizesOf are the sizes that each kind of shape has, all needed.
@@ -88,14 +89,17 @@ var sizesOf = map[string][]string{
 func checkShapes(s *survey) {
 	for i := range s.Spacings {
 		s.shapeOf(s.Spacings[i].Shape, s.Spacings[i].Clearance)
+		s.shapeField(s.Spacings[i].Shape, s.Spacings[i].Clearance, s.Spacings[i].Medium)
 	}
 	for i := range s.Feedthroughs {
 		f := &s.Feedthroughs[i]
 		if f.AirSide != nil {
 			s.shapeOf(f.AirSide.Shape, f.AirSide.Clearance)
+			s.shapeField(f.AirSide.Shape, f.AirSide.Clearance, document.Given[string]{})
 		}
 		if f.VacuumSide != nil {
 			s.shapeOf(f.VacuumSide.Shape, f.VacuumSide.Length)
+			s.shapeField(f.VacuumSide.Shape, f.VacuumSide.Length, document.Given[string]{})
 		}
 	}
 }
@@ -111,14 +115,14 @@ func (s *survey) shapeOf(sh *Shape, clearance document.Given[quantity.Length]) {
 
 func (s *survey) shapeSizes(sh *Shape) {
 	kind := sh.Kind.V
-	wanted := sizesOf[kind]
+	wanted, more := sh.sizesOf()
 	for _, size := range sh.sizes() {
 		belongs := slices.Contains(wanted, size.key)
 		switch {
 		case belongs && s.lacks(size.given.Place):
 			s.fault(sh.Here(), "a shape of kind "+quoted(kind)+" without "+size.key, "give "+size.key+`, as in `+size.key+` = "3 mm"`)
-		case !belongs && size.given.Set():
-			s.fault(size.given.Place, "no size of a shape of kind "+quoted(kind), "sizes of this kind: "+orNone(wanted))
+		case !belongs && !slices.Contains(more, size.key) && size.given.Set():
+			s.fault(size.given.Place, "no size of a shape of kind "+quoted(kind), "sizes of this kind: "+orNone(append(wanted, more...)))
 		}
 	}
 	if sh.Earthed.Set() && kind != "sphere-plane" && kind != "sphere-sphere" {

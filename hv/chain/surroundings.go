@@ -148,6 +148,16 @@ type Shape struct {
 	TipRadius   document.Given[quantity.Length] `key:"tip_radius" range:"> 0 mm, <= 10 m" means:"point-plane" example:"0.5 mm"`
 	EdgeRadius  document.Given[quantity.Length] `key:"edge_radius" range:"> 0 mm, <= 10 m" means:"rounded edge" example:"2 mm"`
 	Earthed     document.Given[bool]            `key:"earthed" means:"sphere-sphere: one sphere is earthed (default: true)" example:"true"`
+
+	BodyRadius document.Given[quantity.Length] `key:"body_radius" range:"> 0 mm, <= 10 m" means:"plates, rounded edge: radius of the round body whose rim the edge is; its field is then worked out" example:"30 mm"`
+	WallRadius document.Given[quantity.Length] `key:"wall_radius" range:"> 0 mm, <= 10 m" means:"radius of an earthed wall around the gap; the field is then worked out" example:"200 mm"`
+	Computed   document.Given[bool]            `key:"computed" means:"the field is worked out and judges, its closed form stands beside it (default: false)" example:"false"`
+}
+
+// IsComputed reports whether the field of a shape is worked out: on demand, and with sizes
+// for which there is no closed form.
+func (sh *Shape) IsComputed() bool {
+	return sh != nil && (sh.Computed.V || sh.BodyRadius.Set() || sh.WallRadius.Set())
 }
 
 // Field is an axisymmetric arrangement whose electrostatic field is wanted.

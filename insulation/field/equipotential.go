@@ -114,11 +114,7 @@ func (f *Field) panelTrack(fc face) (t track) {
 }
 
 func (f *Field) lineTrack(fc face, at float64) (t track) {
-	x, u, g := f.surface(f.values, fc, at)
-	if cmplx.Abs(g) == 0 {
-		return nil
-	}
-	line, _ := f.lineFrom(fc, at, x, u, g, false) // what there is of it serves
+	line, _ := f.lineFrom(Peak{face: fc, t: at}, false) // what there is of it serves
 	region := f.regionOf(fc)
 	for i, p := range line.Points {
 		if i > 0 && p.Body != line.Points[i-1].Body {

@@ -29,33 +29,27 @@ const linePart = 0.02
 // line of the gap, with the field along it. It passes through surfaces of
 // dielectrics, where it has a place on either side.
 func (f *Field) Line(from Peak) (Line, error) {
-	if from.face.side < 0 || f.walls[f.values.sides[from.face.side].wall].electrode < 0 {
+	if from.face.side >= 0 && f.walls[f.values.sides[from.face.side].wall].electrode < 0 {
 		return Line{}, lack.Range("a field line is drawn from the peak on an electrode")
 	}
-	x, u, g := f.surface(f.values, from.face, from.t)
-	if cmplx.Abs(g) == 0 {
-		return Line{}, lack.Failed("at %v there is no field to follow", from.At)
-	}
-	return f.lineFrom(from.face, from.t, x, u, g, false)
+	return f.lineFrom(from, false)
 }
 
 // Within is the field line from the place of a peak, on an electrode or on a dielectric,
 // through the body that the peak lies in, to where it leaves that body.
-func (f *Field) Within(from Peak) (Line, error) {
-	if from.face.side < 0 {
+func (f *Field) Within(from Peak) (Line, error) { return f.lineFrom(from, true) }
+
+func (f *Field) lineFrom(from Peak, within bool) (Line, error) {
+	if from.face.side < 0 && f.mirror == nil {
 		return Line{}, lack.Range("a field line is drawn from a peak on an electrode or a dielectric")
 	}
-	x, u, g := f.surface(f.values, from.face, from.t)
+	start := f.footOf(from)
+	x, u, g := start.x, start.u, start.g
 	if cmplx.Abs(g) == 0 {
 		return Line{}, lack.Failed("at %v there is no field to follow", from.At)
 	}
-	return f.lineFrom(from.face, from.t, x, u, g, true)
-}
-
-func (f *Field) lineFrom(fc face, at float64, x complex128, u float64, g complex128, within bool) (Line, error) {
-	t := &tracer{Field: f, region: f.regionOf(fc), along: 1, tolerance: 2e-5, within: within}
-	_, path := f.values.sides[fc.side].panel.at(at)
-	if into := path * complex(0, -fc.sign); real(g*cmplx.Conj(into)) < 0 {
+	t := &tracer{Field: f, region: start.region, along: 1, tolerance: 2e-5, within: within}
+	if real(g*cmplx.Conj(start.into)) < 0 {
 		t.along = -1
 	}
 	line := Line{}
@@ -199,6 +193,11 @@ func (t *tracer) crossed(x, next complex128) (first *wall, at complex128) {
 			if d := apart(p, x); d > 2*onSurface && d < best {
 				best, first, at = d, w, p
 			}
+		}
+	}
+	if m := t.mirror; m != nil && m.earthed && !t.across() {
+		if d, p := t.toMirror(x, next); d < best {
+			return &wall{kind: conductor, electrode: len(t.names) - 1}, p
 		}
 	}
 	return first, at

@@ -4,6 +4,7 @@ import (
 	"math"
 	"testing"
 
+	"kilovet/hv/profile"
 	"kilovet/hv/quantity"
 )
 
@@ -157,4 +158,36 @@ func TestAlongSurfaces(t *testing.T) {
 		t.Fatalf("%v: the ceramic is on the left", on)
 	}
 	within(t, "field off the surface", float64(off.Axial), float64(on.Axial), 2e-3)
+}
+
+// A sphere over an earthed plane without end: the line from the sphere ends on the plane,
+// that from the plane on the sphere; both are as long as the gap and bear its voltage.
+func TestLineToAPlaneWithoutEnd(t *testing.T) {
+	for _, side := range []float64{1, -1} {
+		turn := profile.Left
+		if side < 0 {
+			turn = profile.Right
+		}
+		ball := mustProfile(t, "ball", profile.Stroke{From: mm([2]float64{0, 20 * side})},
+			profile.Stroke{To: mm([2]float64{0, 30 * side}), Centre: mm([2]float64{0, 25 * side}), Turn: turn})
+		f := under(t, Arrangement{
+			Electrodes: []Electrode{{"ball", []profile.Profile{ball}}},
+			Boundaries: []Boundary{{Earth, path(t, "floor", 0, 0, 90, 0)}},
+		}, map[string]quantity.Voltage{"ball": 1000})
+		for from, to := range map[string]string{"ball": Earthed, Earthed: "ball"} {
+			p, err := f.Peak(from)
+			if err != nil {
+				t.Fatal(err)
+			}
+			for _, follow := range []func(Peak) (Line, error){f.Line, f.Within} {
+				l, err := follow(p)
+				if err != nil || l.Ends != to {
+					t.Fatalf("the line from %s ends on %q: %v", from, l.Ends, err)
+				}
+				last := l.Points[len(l.Points)-1]
+				within(t, "length", float64(last.Along), 20e-3, 1e-6)
+				within(t, "voltage", math.Abs(float64(l.Points[0].Potential-last.Potential)), 1000, 1e-6)
+			}
+		}
+	}
 }

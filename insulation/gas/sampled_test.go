@@ -25,7 +25,7 @@ func TestOnsetOfAnyComputedLine(t *testing.T) {
 			list = append(list, shape.Sample{Along: quantity.Length(x), Field: quantity.Field(e)})
 			x += math.Exp(rapid.Float64Range(-12, -3).Draw(rt, "ln step"))
 		}
-		l, err := shape.Sampled(list)
+		l, err := shape.Sampled(list, shape.Across(list))
 		if err != nil {
 			rt.Fatal(err)
 		}

@@ -38,7 +38,8 @@ func cylinderPlane(r, d float64) Line {
 }
 
 // roundedEdge: an edge rounded with radius r whose two faces run away from the gap.
-// A full cylinder of that radius over the plane has the sharper field: an upper bound.
+// A full cylinder of that radius over the plane has the sharper field: an upper bound for
+// an edge that runs straight. The end of a rod of few edge radii has more.
 func roundedEdge(r, d float64) Line {
 	l := cylinderPlane(r, d)
 	l.bound = true

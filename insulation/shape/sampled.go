@@ -17,22 +17,31 @@ type Sample struct {
 // Sampled is a critical line along which the field was computed, from the more highly
 // stressed electrode on. Between the samples its logarithm runs straight. Where the
 // field does not fall towards its least value it is raised to the greatest farther on:
-// an upper bound. The voltage is what the samples add up to before that. Fewer than three places,
-// or a field of nothing at the start, are a lack.
-func Sampled(samples []Sample) (Line, error) {
+// an upper bound. Across is the voltage between its ends. Fewer than three places, a field
+// of nothing at the start, or samples that do not add up to the voltage within a
+// twentieth, are a lack.
+func Sampled(samples []Sample, across quantity.Voltage) (Line, error) {
 	x, e := apart(samples)
 	if len(x) < 3 {
 		return Line{}, lack.Range("a critical line takes three places with a field, there are %d", len(x))
 	}
-	across := integral(x, e)
+	if sum := integral(x, e); !(math.Abs(sum/float64(across)-1) < 0.05) {
+		return Line{}, lack.Range("the field along the line adds up to %s, across it are %s", quantity.Text(quantity.Voltage(sum)), quantity.Text(across))
+	}
 	least := slices.Index(e, slices.Min(e))
 	raised := raise(e, least)
 	l := Line{
 		gap: quantity.Length(x[len(x)-1]), trough: quantity.Length(x[least]), bound: raised, computed: true,
-		at: func(at float64) float64 { return logarithmic(x, e, at) / across },
+		at: func(at float64) float64 { return logarithmic(x, e, at) / float64(across) },
 	}
 	l.radius = quantity.Length(falls(x, e))
 	return l, nil
+}
+
+// Across is the voltage that samples add up to.
+func Across(samples []Sample) quantity.Voltage {
+	x, e := apart(samples)
+	return quantity.Voltage(integral(x, e))
 }
 
 // apart takes distances and fields apart, from zero, each distance once.

@@ -34,7 +34,7 @@ func TestSampledIsTheLineItWasTakenFrom(t *testing.T) {
 		if err != nil {
 			t.Fatal(err)
 		}
-		l, err := shape.Sampled(samplesOf(exact, 5000, 400))
+		l, err := shape.Sampled(samplesOf(exact, 5000, 400), 5000)
 		if err != nil {
 			t.Fatal(err)
 		}
@@ -62,10 +62,6 @@ func TestSampledIsAnUpperBound(t *testing.T) {
 			list = append(list, shape.Sample{Along: quantity.Length(x), Field: quantity.Field(rapid.Float64Range(1, 1e6).Draw(rt, "field"))})
 			x += rapid.Float64Range(1e-6, 1e-2).Draw(rt, "step")
 		}
-		l, err := shape.Sampled(list)
-		if err != nil {
-			rt.Fatal(err)
-		}
 		scale := 0.0 // the voltage, by the logarithmic mean
 		for i := 1; i < len(list); i++ {
 			a, b := float64(list[i-1].Field), float64(list[i].Field)
@@ -74,6 +70,10 @@ func TestSampledIsAnUpperBound(t *testing.T) {
 				mean = (a - b) / math.Log(a/b)
 			}
 			scale += mean * float64(list[i].Along-list[i-1].Along)
+		}
+		l, err := shape.Sampled(list, quantity.Voltage(scale))
+		if err != nil {
+			rt.Fatal(err)
 		}
 		for i, s := range list {
 			if got := float64(l.PerVolt(s.Along)) * scale; got < float64(s.Field)*(1-1e-9) {
@@ -94,8 +94,18 @@ func TestSampledIsAnUpperBound(t *testing.T) {
 
 func TestSampledNeedsThreePlaces(t *testing.T) {
 	for _, list := range [][]shape.Sample{nil, {{0, 1}, {1, 1}}, {{0, 1}, {0, 1}, {0, 1}}, {{0, 0}, {1, 0}, {2, 0}}} {
-		if _, err := shape.Sampled(list); lack.Of(err) == nil {
+		if _, err := shape.Sampled(list, 1); lack.Of(err) == nil {
 			t.Errorf("%v: %v", list, err)
 		}
+	}
+}
+
+func TestSampledAddsUpToItsVoltage(t *testing.T) {
+	list := []shape.Sample{{Along: 0, Field: 1}, {Along: 1, Field: 1}, {Along: 2, Field: 1}}
+	if _, err := shape.Sampled(list, 2.2); lack.Of(err) == nil {
+		t.Errorf("2 V along a line of 2.2 V: %v", err)
+	}
+	if l, err := shape.Sampled(list, 2.02); err != nil || l.Peak(2.02) != 1 {
+		t.Errorf("the field at the start is not that of the sample: %v, %v", l.Peak(2.02), err)
 	}
 }

@@ -15,10 +15,14 @@ type Arrangement struct {
 	chain.Field
 	// From says what it was built from; empty for a described one.
 	From string
+	// Of is the name of what it was built from.
+	Of string
 	// Assumed is what building it took for granted.
 	Assumed []string
 	// Dimensions are those it was built from.
 	Dimensions []Dimension
+	// Gap is the spacing whose shape it was built from, nil for none.
+	Gap *chain.Spacing
 	// Err is the reason why it could not be built.
 	Err error
 }

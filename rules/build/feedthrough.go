@@ -17,6 +17,9 @@ const (
 	OuterGap = "gap at the hole"
 )
 
+// FromFeedthrough is what says that an arrangement was built from a feedthrough.
+const FromFeedthrough = "feedthrough"
+
 // Feedthrough is the arrangements of a feedthrough, one a side: half of it from the
 // middle of the plate on, with the pin going on beyond the sleeve and an earthed wall
 // far around.
@@ -57,7 +60,7 @@ type throughBuilder struct {
 
 func (b throughBuilder) arrangement(d throughSizes) *Arrangement {
 	p := pen{b.Here()}
-	a := &Arrangement{Field: p.field(b.name, b.medium), From: "feedthrough"}
+	a := &Arrangement{Field: p.field(b.name, b.medium), From: FromFeedthrough, Of: b.Name.V}
 	if a.Err = b.check(d); a.Err != nil {
 		return a
 	}

@@ -8,13 +8,16 @@ import (
 )
 
 // Arrangements are all whose field is worked out: the described ones, then those built
-// from feedthroughs and from the geometry of the gun. Each has a name of its own.
+// from feedthroughs, from the geometry of the gun and from shapes of spacings. Each has a
+// name of its own.
 func (e *Evidence) Arrangements() []*build.Arrangement {
-	all, _ := remember(e.Under(Condition{}), "arrangements", func() ([]*build.Arrangement, error) { return arrangements(e.chain), nil })
+	all, _ := remember(e.Under(Condition{}), "arrangements", func() ([]*build.Arrangement, error) {
+		return e.Under(Condition{}).arrangements(e.chain), nil
+	})
 	return all
 }
 
-func arrangements(c *chain.Chain) (all []*build.Arrangement) {
+func (e *Evidence) arrangements(c *chain.Chain) (all []*build.Arrangement) {
 	for i := range c.Fields {
 		all = append(all, build.Described(&c.Fields[i]))
 	}
@@ -24,6 +27,7 @@ func arrangements(c *chain.Chain) (all []*build.Arrangement) {
 	if c.Gun.IsFitted() && c.Gun.Geometry != nil {
 		all = append(all, build.Gun(c.Gun.Geometry))
 	}
+	all = append(all, e.shapes()...)
 	var names []string
 	for _, a := range all {
 		for slices.Contains(names, a.Name.V) {

@@ -98,7 +98,7 @@ func lineOf(l field.Line) (line shape.Line, reversed bool, err error) {
 	if reversed {
 		slices.Reverse(samples)
 	}
-	line, err = shape.Sampled(samples)
+	line, err = shape.Sampled(samples, quantity.Voltage(math.Abs(float64(l.Points[0].Potential-last.Potential))))
 	return line, reversed, err
 }
 
@@ -110,14 +110,24 @@ func across(l field.Line, w Where, f *build.Arrangement) (quantity.Voltage, gap.
 	if v > 0 {
 		polarity = gap.Positive
 	}
-	if w.Beside != "" || f.From == "feedthrough" && f.Electrodes[0].Voltage.Set() {
+	if w.Beside != "" || unsigned(f) {
 		polarity = gap.Unknown
 	}
 	return quantity.Voltage(math.Abs(float64(v))), polarity
 }
 
+// unsigned reports whether only the size of the voltages of an arrangement is described.
+func unsigned(f *build.Arrangement) bool {
+	return f.From == build.FromShape || f.From == build.FromFeedthrough && f.Electrodes[0].Voltage.Set()
+}
+
 // Filling is what fills a body of an arrangement, as insulation reads it.
 func (e *Evidence) Filling(f *build.Arrangement, body string) gap.Gap {
+	if f.Gap != nil {
+		g := e.gap(f.Gap)
+		g.Shape = nil
+		return g
+	}
 	g := gap.Gap{Medium: gap.Medium(f.Medium.Or("vacuum")), Gas: gap.Gas(f.Gas.V), Pressure: f.Pressure.V, Temperature: f.Temperature.V}
 	for _, d := range f.Dielectrics {
 		if d.Name.V == body && d.Fill.Set() {

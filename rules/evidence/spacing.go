@@ -78,7 +78,9 @@ func (e *Evidence) spacingInFault(s *chain.Spacing) (Spacing, error) {
 	return remember(e, "spacing "+s.Name.V, func() (Spacing, error) {
 		v := usual.Voltages
 		v.Peak = peak.Value
-		return Spacing{v, peak.Under, usual.Lasting, usual.Gap, insulation.Assess(usual.Gap, v)}, nil
+		x := Spacing{v, peak.Under, usual.Lasting, usual.Gap, insulation.Assess(usual.Gap, v)}
+		e.Healthy().byField(s, &x) // its field is that of the same line, for each volt
+		return x, nil
 	})
 }
 

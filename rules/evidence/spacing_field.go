@@ -2,24 +2,24 @@ package evidence
 
 import (
 	"fmt"
-	"slices"
 
 	"kilovet/hv/chain"
 	"kilovet/hv/lack"
 	"kilovet/hv/quantity"
 	"kilovet/insulation"
-	"kilovet/insulation/field"
 	"kilovet/insulation/gap"
+	"kilovet/rules/build"
 )
 
 // byField puts the computed field of a gap in the place of the closed shape where the
-// description names one; what the shape gives stands beside it.
+// description names one, asks for it or gives sizes that have no closed form; what the
+// shape gives stands beside it.
 func (e *Evidence) byField(s *chain.Spacing, x *Spacing) {
-	if !s.Field.Set() {
+	f, c, err := e.criticalOf(s)
+	if f == nil && err == nil {
 		return
 	}
 	closed := x.Assessment
-	c, err := e.criticalOf(s)
 	if err != nil {
 		none := lack.Of(err)
 		x.Assessment.FieldPeak = gap.Result[quantity.Field]{Lack: none}
@@ -34,11 +34,11 @@ func (e *Evidence) byField(s *chain.Spacing, x *Spacing) {
 	by := insulation.StrengthAlong(x.Gap, c.Line, x.Voltages.Sharp)
 	shape := "no closed shape"
 	if x.Gap.Shape != nil {
-		shape = "closed shape, " + string(x.Gap.Shape.Kind)
+		shape = "closed shape, " + string(x.Gap.Shape.Kind) + f.ClosedFor()
 	}
 	x.Assessment.FieldPeak = gap.Result[quantity.Field]{Answer: gap.Answer[quantity.Field]{
 		Value:   c.Line.Peak(x.Voltages.Peak),
-		Because: fmt.Sprintf("computed field of %s, utilisation factor %.3g", s.Field.V, float64(c.Line.Utilisation())),
+		Because: fmt.Sprintf("computed field of %s, utilisation factor %.3g", f.Name.V, float64(c.Line.Utilisation())),
 		Sources: []gap.Source{{Text: "computed field of the described arrangement", Mark: gap.Derived, Governs: true}},
 		Shown:   besides(closed.FieldPeak, shape),
 	}}
@@ -59,33 +59,31 @@ func besides[Q quantity.Number](r gap.Result[Q], how string) []gap.Beside[Q] {
 	return []gap.Beside[Q]{{Value: r.Value, Source: gap.Source{Text: how, Mark: gap.Derived}}}
 }
 
-// criticalOf is the critical line of the named arrangement from that of the electrodes
-// at the spacing's nodes that bears the greater field; of any where it has none.
-func (e *Evidence) criticalOf(s *chain.Spacing) (Critical, error) {
+// criticalOf is the critical line of the arrangement that judges a spacing: the named one
+// from that of the electrodes at the spacing's nodes that bears the greater field, or the
+// one built from its shape. No arrangement, and no error, where the closed shape judges.
+func (e *Evidence) criticalOf(s *chain.Spacing) (*build.Arrangement, Critical, error) {
+	if !s.Field.Set() {
+		f, on := e.shapeOrHole(s)
+		if f == nil {
+			return nil, Critical{}, nil
+		}
+		c, err := e.worstLine(f, on)
+		return f, c, err
+	}
 	f := e.Arrangement(s.Field.V)
 	if f == nil {
-		return Critical{}, lack.Range("there is no arrangement %s", s.Field.V)
+		return nil, Critical{}, lack.Range("there is no arrangement %s", s.Field.V)
 	}
 	if medium := f.Medium.Or("vacuum"); medium != s.Medium.V {
-		return Critical{}, lack.Range("the field %s is that of %s, the gap is in %s", s.Field.V, medium, s.Medium.V)
+		return f, Critical{}, lack.Range("the field %s is that of %s, the gap is in %s", s.Field.V, medium, s.Medium.V)
 	}
-	var most Critical
-	for _, el := range f.Electrodes {
-		if s.From.Set() && !slices.Contains(append(ends(s), s.To.V), el.Node.V) {
-			continue
-		}
-		c, err := e.Critical(f, e.ClearOfEdges(f, Where{Electrode: el.Name.V, Body: field.Medium}))
-		if err != nil {
-			return c, err
-		}
-		if most.Field == nil || c.Strength.Onset.Lack == nil && c.Peak.Strength > most.Peak.Strength {
-			most = c
-		}
+	on := looked(f, s)
+	if len(on) == 0 {
+		return f, Critical{}, lack.Range("no electrode of %s is at %s or %s", s.Field.V, s.From.V, s.To.V)
 	}
-	if most.Field == nil {
-		return most, lack.Range("no electrode of %s is at %s or %s", s.Field.V, s.From.V, s.To.V)
-	}
-	return most, nil
+	c, err := e.worstLine(f, on)
+	return f, c, err
 }
 
 func ends(s *chain.Spacing) []string { return append([]string{s.From.V}, s.Also.V...) }

@@ -64,7 +64,7 @@ func (e *Evidence) fieldCases(f *build.Arrangement) ([]fieldCase, error) {
 }
 
 func (e *Evidence) casesOf(f *build.Arrangement, s *field.Solution) (all []fieldCase, err error) {
-	for _, c := range conditionsOf(f) {
+	for _, c := range e.conditionsOf(f) {
 		extremes, err := e.Under(c).extremes(f)
 		if err != nil {
 			return nil, err
@@ -94,8 +94,13 @@ func alikeVolts(a, b map[string]quantity.Voltage) bool {
 }
 
 // conditionsOf are the conditions under which a field differs: one where no electrode
-// is at a node.
-func conditionsOf(f *build.Arrangement) []Condition {
+// is at a node; that of the highest voltage for the shape of a spacing.
+func (e *Evidence) conditionsOf(f *build.Arrangement) []Condition {
+	if f.Gap != nil {
+		if _, under, _, err := e.across(f.Gap); err == nil {
+			return []Condition{under}
+		}
+	}
 	if slices.ContainsFunc(f.Electrodes, func(el chain.Electrode) bool { return el.Node.Set() && el.Node.V != "ground" }) {
 		return Ratings()
 	}

@@ -31,7 +31,7 @@ func TestGrowthInAFallingFieldPublished(t *testing.T) {
 			across += float64(field(x)+field(x-far/n)) / 2 * far / n
 		}
 	}
-	l, err := shape.Sampled(samples)
+	l, err := shape.Sampled(samples, quantity.Voltage(across))
 	if err != nil {
 		t.Fatal(err)
 	}

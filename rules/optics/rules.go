@@ -121,5 +121,5 @@ func measuredRipple(e *evidence.Evidence) string {
 
 // Rules lists the rules of this family.
 func Rules() []rule.Rule {
-	return []rule.Rule{blur, emissionLaw, emissionLimit, cutoff, adjustment, regulating, heaterBalance, feedPower, disturbance, hum, drift}
+	return []rule.Rule{blur, emissionLaw, emissionLimit, cutoff, adjustment, regulating, heaterBalance, feedPower, disturbance, hum, drift, energyWidth}
 }

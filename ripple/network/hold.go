@@ -19,10 +19,56 @@ type HoldOptions struct {
 }
 
 // Hold finds the peak of the drive at which the mean of a node is a set voltage, within a
-// part in 1e8, and the state there, by the secant method: the mean is all but proportional
-// to the peak. It is a lack where the load pulls the node to nothing, where there is no
-// such node, and where no peak is found in a dozen trials.
+// part in 1e8, and the state there. Both are sought together, drive and state made larger
+// or smaller at once; where that does not get there, trial by trial. It is a lack where
+// the load pulls the node to nothing, where there is no such node, and where no peak is
+// found in a dozen trials.
 func Hold(o HoldOptions) (quantity.Voltage, *Periodic, error) {
+	if peak, p, err := o.together(); err == nil {
+		return peak, p, nil
+	}
+	return o.byTrials()
+}
+
+// together seeks drive and state at once.
+func (o *HoldOptions) together() (quantity.Voltage, *Periodic, error) {
+	c, err := o.Build(o.First)
+	if err != nil {
+		return 0, nil, err
+	}
+	if err := c.Doubt(); err != nil {
+		return 0, nil, err
+	}
+	s, err := compile(c, &o.Options)
+	if err != nil {
+		return 0, nil, err
+	}
+	n, there := c.Node(o.Node)
+	if !there || s.frame.loose[n] {
+		return 0, nil, lack.Failed("there is no node %s that is tied to ground", o.Node)
+	}
+	h := newSearch(newShooter(s))
+	h.level = &level{span: s.between(n, circuit.Ground), set: o.signed(c), drive: 1, base: make([]float64, s.states())}
+	p, err := h.solve(o.From)
+	if err != nil {
+		return 0, nil, err
+	}
+	peak := o.First * quantity.Voltage(h.level.drive)
+	p.Circuit, err = o.Build(peak)
+	s.c = p.Circuit
+	return peak, p, err
+}
+
+// signed is the voltage to be held, with its sign.
+func (o *HoldOptions) signed(c *circuit.Circuit) float64 {
+	if c.Negative {
+		return -float64(o.Set)
+	}
+	return float64(o.Set)
+}
+
+// byTrials seeks the drive by the secant method.
+func (o *HoldOptions) byTrials() (quantity.Voltage, *Periodic, error) {
 	const tries = 12
 	a := o.First
 	va, near, err := o.try(a)
@@ -55,7 +101,7 @@ func Hold(o HoldOptions) (quantity.Voltage, *Periodic, error) {
 
 // holds reports whether a mean is near enough.
 func (o *HoldOptions) holds(v quantity.Voltage) bool {
-	return quantity.AtMost(math.Abs(float64(v/o.Set-1)), 1e-8)
+	return quantity.AtMost(math.Abs(float64(v/o.Set-1)), held)
 }
 
 // try is the mean of the node at a peak, and the state it was read from.

@@ -168,6 +168,13 @@ func (p *peaks) drive(half int) {
 	}
 }
 
+// renew enters the sources anew.
+func (p *peaks) renew() {
+	p.pressed = 0
+	p.drive(0)
+	p.drive(1)
+}
+
 // over is a diode's voltage beyond its drop at a peak.
 func (p *peaks) over(i, half int, u []float64) float64 {
 	s := 1 - 2*float64(half)

@@ -47,15 +47,18 @@ func (p *Periodic) span(from, to circuit.Node) (span, error) {
 			}
 		}
 	}
+	return s.between(from, to), nil
+}
+
+// between is the way between two nodes.
+func (s *system) between(from, to circuit.Node) span {
 	f := s.frame
-	return span{s.at(f.group[from]), s.at(f.group[to]), f.offset[from].plus(f.offset[to], -1), -1}, nil
+	return span{s.at(f.group[from]), s.at(f.group[to]), f.offset[from].plus(f.offset[to], -1), -1}
 }
 
 // spanOf is the way across an element.
 func (p *Periodic) spanOf(e *circuit.Element) span {
-	s := p.track.system
-	f := s.frame
-	return span{s.at(f.group[e.From]), s.at(f.group[e.To]), f.offset[e.From].plus(f.offset[e.To], -1), -1}
+	return p.track.system.between(e.From, e.To)
 }
 
 // startFrom corrects the guess by as much as the guess for a similar circuit had to

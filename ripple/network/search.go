@@ -11,6 +11,8 @@ import (
 // and the state is led on in leaps of many periods, as time itself would.
 type search struct {
 	*envelope
+	level     *level  // the voltage to be held; nil where the drive is given
+	sound     spot    // the last state that was not a step back
 	patience  int     // leaps it may take
 	last      float64 // change over the period at the state corrected last
 	trial     bool    // the last correction has yet to prove itself
@@ -35,12 +37,16 @@ func newSearch(s *shooter) *search {
 // approach corrects the state in one grade until a correction is a small part of it.
 func (s *search) approach(g grade, small float64) error {
 	return s.until(g, func() bool {
-		if norm(s.step) > small*norm(s.x) {
-			return false
-		}
-		axpy(1, s.step, s.x)
-		return true
+		return norm(s.step) <= small*norm(s.x)
 	})
+}
+
+// follows takes the correction in hand, and with it what the drive lacks.
+func (s *search) follows(f float64) {
+	axpy(1, s.step, s.x)
+	if s.level != nil {
+		s.lift(f)
+	}
 }
 
 // converge corrects the state until the charges come back.
@@ -50,7 +56,7 @@ func (s *search) converge(g grade) error {
 		size := norm(s.r)
 		stalled := size > 0.3*last
 		last = size
-		small := 1e-9
+		small := 1e-8
 		if stalled { // what is left is rounding, which a mode that only leakage ties down makes much of
 			small = 1e-5
 		}
@@ -95,7 +101,7 @@ func (s *search) once(g grade, done func() bool) (finished bool, err error) {
 		s.still = 0
 	}
 	if size > 3*s.last || s.trial && size > s.last {
-		copy(s.x, s.good)
+		s.goBack(&s.sound)
 		s.stray, s.last, s.trial, s.still = true, math.Inf(1), false, 0
 		return false, nil
 	}
@@ -107,13 +113,23 @@ func (s *search) once(g grade, done func() bool) (finished bool, err error) {
 		return false, s.advance(math.Inf(1))
 	}
 	s.work.Iterations++
-	if done() {
+	f, err := s.lacking()
+	if err != nil {
+		return false, err
+	}
+	if math.Abs(f-1) <= g.tolerated() && done() {
+		if g == rough {
+			s.follows(f)
+		}
 		s.pace.track = s.linear
 		return true, nil
 	}
-	copy(s.good, s.x)
+	s.mark(&s.sound)
 	s.last = size
-	axpy(1, s.step, s.x)
+	s.follows(f)
+	if math.Abs(f-1) > s.strange() {
+		s.last, s.trial = math.Inf(1), false
+	}
 	s.pace.smooth = s.largestCharge(s.step) <= exacting*s.pace.passed
 	return false, nil
 }
@@ -165,14 +181,14 @@ func (s *search) newton() {
 	}
 }
 
-// balanced reports whether the charges come back to 1e-8 of what the diodes pass,
+// balanced reports whether the charges come back to 1e-7 of what the diodes pass,
 // or, where rounding keeps them from coming any closer, to 3e-7.
 func (s *shooter) balanced(stalled bool) bool {
 	worst, most := s.largestCharge(s.r), s.largestCharge(s.x)
 	if stalled {
 		return worst <= math.Max(3e-7*s.pace.passed, 1e-11*most)
 	}
-	return worst <= math.Max(1e-8*s.pace.passed, 1e-13*most)
+	return worst <= math.Max(1e-7*s.pace.passed, 1e-13*most)
 }
 
 // largestCharge is the largest charge in a state or a change of it.

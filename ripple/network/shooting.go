@@ -23,7 +23,7 @@ type shooter struct {
 	dq, di, du      []float64
 	lanes           []trio
 	on              []bool
-	good            []float64 // the last state that was not a step back
+	pressed         float64 // how hard the diodes are pressed in the guess
 	work            Work
 }
 
@@ -34,7 +34,6 @@ func newShooter(s *system) *shooter {
 	h.x, h.r, h.step, h.old = make([]float64, m), make([]float64, m), make([]float64, m), make([]float64, m)
 	h.q, h.dq, h.du = make([]float64, s.n), make([]float64, s.n), make([]float64, s.n)
 	h.amps, h.di = make([]float64, len(s.inductors)), make([]float64, len(s.inductors))
-	h.good = make([]float64, m)
 	h.lanes, h.on = make([]trio, s.n), make([]bool, len(s.diodes))
 	return h
 }
@@ -51,19 +50,25 @@ func (s *system) measureOfEnergy() float64 {
 // guess starts from the charges at the negative peak of the drive, with the diodes
 // pressed to conduct.
 func (s *shooter) guess(press float64) {
+	s.pressed = press
+	s.balance(s.x)
+	s.judge(s.peaks.passed())
+}
+
+// balance is the state at the negative peak of the drive by the balance of charges.
+func (s *shooter) balance(x []float64) {
 	p := s.peaks
-	p.press(press)
+	p.press(s.pressed)
 	p.solve()
 	p.lean()
 	p.charge(p.u[s.n:], s.q)
 	for k := range s.q {
 		s.q[k] += s.capDirect[k] - s.capSquare[k] - s.capSine[k]
 	}
-	s.pack(s.q, s.amps, s.root, s.x)
 	for i := range s.amps {
 		s.amps[i] = 0
 	}
-	s.judge(p.passed())
+	s.pack(s.q, s.amps, s.root, x)
 }
 
 // judge takes the largest charge a diode passes in a period as the measure of what

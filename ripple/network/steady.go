@@ -28,15 +28,20 @@ func Steady(c *circuit.Circuit, o Options) (*Periodic, error) {
 	if err := c.Doubt(); err != nil {
 		return nil, err
 	}
+	s, err := compile(c, &o)
+	if err != nil {
+		return nil, err
+	}
+	return newSearch(newShooter(s)).solve(o.From)
+}
+
+// compile sets up the equations of a circuit.
+func compile(c *circuit.Circuit, o *Options) (*system, error) {
 	frequency := o.Frequency
 	if frequency == 0 {
 		frequency = Drive(c)
 	}
-	s, err := newSystem(c, float64(frequency), smallestLeak*float64(frequency))
-	if err != nil {
-		return nil, err
-	}
-	return newShooter(s).solve(o.From)
+	return newSystem(c, float64(frequency), smallestLeak*float64(frequency))
 }
 
 // attempt is one way to begin a search.
@@ -54,7 +59,7 @@ func attempts() []attempt {
 }
 
 // solve searches briskly, and with care where that does not get there.
-func (s *shooter) solve(from *Periodic) (*Periodic, error) {
+func (s *search) solve(from *Periodic) (*Periodic, error) {
 	p, err := s.search(from)
 	if err == nil {
 		return p, nil
@@ -64,48 +69,80 @@ func (s *shooter) solve(from *Periodic) (*Periodic, error) {
 }
 
 // search searches in one way after the other.
-func (s *shooter) search(from *Periodic) (*Periodic, error) {
-	h := newSearch(s)
+func (s *search) search(from *Periodic) (*Periodic, error) {
 	var err error
 	for _, a := range attempts() {
+		s.driveTo(1)
 		s.guess(a.press / float64(1+len(s.diodes)*len(s.diodes)))
 		if from != nil {
 			s.startFrom(from)
 			from = nil
+		} else {
+			s.aim()
 		}
-		if err = h.begin(a); err == nil {
-			return h.refine()
+		if err = s.begin(a); err == nil {
+			return s.refine()
 		}
 	}
 	return nil, err
 }
 
+// nearby is the correction, in parts of the state, that ends the search in the rough grade:
+// what Newton's method leaves after it is far less than the two grades differ by.
+const nearby = 3e-4
+
 // begin leads the guess near to rest in the rough grade.
 func (s *search) begin(a attempt) error {
 	if a.creep {
-		return s.creep(rough, 1e-4)
+		return s.creep(rough, nearby)
 	}
 	s.patience = a.leaps
-	return s.approach(rough, 1e-4)
+	return s.approach(rough, nearby)
 }
 
 // refine goes from the state in the rough grade to that in the fine one.
 func (s *search) refine() (*Periodic, error) {
 	s.judge(math.Max(s.pace.passed, s.pace.track.passed()))
-	before := append([]float64(nil), s.x...)
-	s.patience = 20
-	if err := s.converge(fine); err != nil {
-		copy(s.x, before)
-		if err := s.creep(fine, 1e-7); err != nil {
-			return nil, err
-		}
-		if !s.balanced(true) {
-			return nil, lack.Failed("the periodic state was not reached in %d periods", s.pace.work.Periods)
-		}
+	var before spot
+	s.mark(&before)
+	if err := s.settleFine(&before); err != nil {
+		return nil, err
 	}
 	p := s.periodic()
-	p.Uncertainty = quantity.Voltage(s.apart(before, s.x))
+	after := append([]float64(nil), s.x...)
+	s.returnTo(&before)
+	p.Uncertainty = quantity.Voltage(s.apart(s.x, after))
 	return p, p.plausible()
+}
+
+// settleFine goes from a state in the rough grade to that in the fine one. Where
+// corrections come no nearer, what a diode may pass before its switching is located may
+// decide whether it switches at all: then they go on with care.
+func (s *search) settleFine(from *spot) error {
+	if s.pace.care > careful {
+		s.patience = 2
+		if s.converge(fine) == nil {
+			return nil
+		}
+		s.goBack(from)
+		s.pace.care = careful
+		s.judge(s.pace.passed)
+	}
+	s.patience = 20
+	if s.converge(fine) == nil {
+		return nil
+	}
+	s.goBack(from)
+	if s.level != nil {
+		return lack.Failed("the drive that holds the voltage was not reached in %d periods", s.pace.work.Periods)
+	}
+	if err := s.creep(fine, 1e-7); err != nil {
+		return err
+	}
+	if !s.balanced(true) {
+		return lack.Failed("the periodic state was not reached in %d periods", s.pace.work.Periods)
+	}
+	return nil
 }
 
 // Drive is the frequency of a circuit's drive: of the first alternating source of

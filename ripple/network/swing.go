@@ -50,11 +50,11 @@ func (p *Periodic) swing(s *span) Swing {
 	for k := range p.track.steps {
 		y := p.track.stages(k, s)
 		for j, c := range share {
-			sum += c * p.track.steps[k].length * y[j+1]
+			sum += c * p.track.steps[k].length * s.difference(p.track.potentials(k, j+1))
 		}
 		w.Least, w.Greatest = y.widen(p.track.steps[k].euler, w.Least, w.Greatest)
 	}
-	w.Mean = quantity.Voltage(sum / p.track.period)
+	w.Mean = quantity.Voltage(s.offset.direct + sum/p.track.period) // a sine and a square wave have none
 	return w
 }
 

@@ -1,0 +1,144 @@
+package network
+
+import (
+	"math"
+
+	"kilovet/hv/lack"
+)
+
+// level leads the drive along with the state, so that the mean of a voltage is what it
+// is to be: after each correction of the state the drive is changed by what the mean
+// lacks, and the state by what that does to the circuit between the peaks.
+type level struct {
+	span  span
+	set   float64
+	drive float64   // over that of the circuit that was given
+	base  []float64 // the state by the circuit between the peaks at this drive
+}
+
+// held is the part of the voltage to be held by which the mean may be off.
+const held = 1e-8
+
+// amplify multiplies the alternating sources.
+func (s *system) amplify(f float64) {
+	for _, v := range [][]float64{s.capSine, s.capSquare, s.condSine, s.condSquare} {
+		scaleBy(v, f)
+	}
+	s.spans(func(p *span) { p.offset.amplify(f) })
+	for n := range s.frame.offset {
+		s.frame.offset[n].amplify(f)
+	}
+	s.scale *= f
+}
+
+func (o *offset) amplify(f float64) { o.square, o.sine = o.square*f, o.sine*f }
+
+// driveTo brings the drive of a search to a multiple of the given one.
+func (s *search) driveTo(drive float64) {
+	l := s.level
+	if l == nil || l.drive == drive {
+		return
+	}
+	f := drive / l.drive
+	s.amplify(f)
+	l.span.offset.amplify(f)
+	l.drive = drive
+	s.peaks.renew()
+	s.balance(l.base)
+}
+
+// tolerated is the part by which the mean may be off in a grade.
+func (g grade) tolerated() float64 {
+	if g == rough {
+		return 1e-3
+	}
+	return held
+}
+
+// lacking is the factor by which the mean over the period walked last, and what the
+// correction in hand does to it, falls short of the voltage to be held.
+func (s *search) lacking() (float64, error) {
+	l := s.level
+	if l == nil {
+		return 1, nil
+	}
+	p := Periodic{track: s.linear}
+	mean := float64(p.swing(&l.span).Mean)
+	s.shifted(s.du, 1)
+	after := l.span.difference(s.du)
+	s.shifted(s.du, 0)
+	mean += after - l.span.difference(s.du)
+	if mean/l.set <= 0 {
+		return 0, lack.Failed("the load pulls the voltage to nothing")
+	}
+	return l.set / mean, nil
+}
+
+// shifted are the potentials at the start of the period, with a part of the correction in
+// hand.
+func (s *search) shifted(u []float64, part float64) {
+	x := s.k2
+	copy(x, s.x)
+	axpy(part, s.step, x)
+	s.unpack(x, s.root, s.q, s.amps)
+	s.pace.place(s.q, s.amps, s.on)
+	s.pace.try(s.grain)
+	copy(u, s.pace.stage[2])
+}
+
+// lift changes the drive by a factor, and the state with it.
+func (s *search) lift(f float64) {
+	l := s.level
+	axpy(-1, l.base, s.x)
+	s.driveTo(l.drive * math.Max(0.25, math.Min(4, f)))
+	axpy(1, l.base, s.x)
+}
+
+// aim guesses the drive from the circuit between the peaks.
+func (s *search) aim() {
+	const passes = 3 // drops and loads do not grow with the drive
+	l, n := s.level, s.n
+	if l == nil {
+		return
+	}
+	copy(l.base, s.x)
+	for range passes {
+		mean := l.span.offset.direct + (l.span.difference(s.peaks.u[:n])+l.span.difference(s.peaks.u[n:]))/2
+		if f := l.set / mean; f > 0 && !math.IsInf(f, 0) {
+			s.lift(f)
+		}
+	}
+}
+
+// spot is a state a search may go back to.
+type spot struct {
+	x     []float64
+	drive float64
+}
+
+func (s *search) mark(p *spot) {
+	p.x = append(p.x[:0], s.x...)
+	if s.level != nil {
+		p.drive = s.level.drive
+	}
+}
+
+func (s *search) goBack(p *spot) {
+	s.driveTo(p.drive)
+	copy(s.x, p.x)
+}
+
+// strange is the part of the drive by which a lift makes the changes over a period before
+// and after it unlike: drops and loads do not grow with the drive.
+func (s *search) strange() float64 { return 1e-5 }
+
+// returnTo is the same at the present drive.
+func (s *search) returnTo(p *spot) {
+	if s.level == nil {
+		s.goBack(p)
+		return
+	}
+	drive := s.level.drive
+	s.goBack(p)
+	s.lift(drive / p.drive)
+}

@@ -62,11 +62,11 @@ func unless[T any](family string, maker func(*evidence.Evidence) []T) func(*evid
 	}
 }
 
-// gather runs the makers in order.
+// gather runs the makers; what they give stands in their order.
 func gather[T any](e *evidence.Evidence, makers ...func(*evidence.Evidence) []T) []T {
-	var all []T
-	for _, make := range makers {
-		all = append(all, make(e)...)
+	bound := make([]func() []T, len(makers))
+	for i, maker := range makers {
+		bound[i] = func() []T { return maker(e) }
 	}
-	return all
+	return inTurn(bound...)
 }

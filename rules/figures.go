@@ -8,33 +8,33 @@ import (
 
 // figures lists every figure of a chain that has a value.
 func figures(e *evidence.Evidence) []figure.Figure {
-	c := &collector{}
+	var parts []func() []figure.Figure
+	in := func(state evidence.State, gather ...func(*collector, *evidence.Evidence)) {
+		for _, g := range gather {
+			parts = append(parts, func() []figure.Figure {
+				c := &collector{state: state}
+				at := e
+				if state != "" {
+					at = e.In(state)
+				}
+				g(c, at)
+				return c.list
+			})
+		}
+	}
 	if e.HasSupply() {
 		for _, state := range evidence.States {
-			c.state = state
-			in := e.In(state)
-			potentials(c, in)
-			bearing(c, in)
-			multiplier(c, in)
-			output(c, in)
-			divider(c, in)
-			stored(c, in)
-			elements(c, in)
+			in(state, potentials, bearing, multiplier, output, divider, stored, elements)
 		}
-		c.state = evidence.Lost
-		arcs(c, e.In(evidence.Lost))
-		c.state = evidence.Working
-		beam(c, e)
-		gunFigures(c, e)
-		paths(c, e)
-		c.state = ""
-		once(c, e)
+		in(evidence.Lost, arcs)
+		in(evidence.Working, beam, gunFigures, paths)
+		in("", once)
 	}
-	spacings(c, e)
+	in("", spacings)
 	if !e.Leaves("fields") {
-		computedFields(c, e)
+		in("", computedFields)
 	}
-	return c.list
+	return inTurn(parts...)
 }
 
 // potentials are listed under every name a node has.

@@ -8,6 +8,7 @@ import (
 	"kilovet/hv/trace"
 	"kilovet/rules/diagram"
 	"kilovet/rules/evidence"
+	"kilovet/rules/exhibit"
 	"kilovet/rules/local"
 	"kilovet/rules/rule"
 )
@@ -44,16 +45,17 @@ type Beside struct {
 func RunUnder(c *chain.Chain, inputs []Input, program Program, beside Beside) (*Review, document.Faults) {
 	e := evidence.New(c).Recorded(beside.Ripple).Without(beside.Without...).Telling(beside.Progress)
 	r := &Review{Program: program, Inputs: inputs, Heading: heading(c), Deference: deference}
-	for _, f := range families() {
-		for _, rl := range f.rules {
-			r.take(rl, judged(e, f, rl))
-		}
-	}
+	var shown []exhibit.Table
+	together(
+		func() { r.judge(e) },
+		func() { r.Figures = figures(e) },
+		func() { r.Curves = curves(e) },
+		func() { shown = tables(e) },
+	)
 	if faults := r.under(beside.Limits, c); len(faults) > 0 {
 		return nil, faults
 	}
-	r.Figures = figures(e)
-	r.Curves, r.Tables = curves(e), slices.Concat(dispositionTable(c, r.Findings), localTable(r.Local), tables(e))
+	r.Tables = slices.Concat(dispositionTable(c, r.Findings), localTable(r.Local), shown)
 	r.Diagram = diagram.Of(e, r.Findings)
 	r.Cautions = cautions(c)
 	r.Assumptions = assumptions(e, r.Findings)
@@ -61,6 +63,23 @@ func RunUnder(c *chain.Chain, inputs []Input, program Program, beside Beside) (*
 	r.Verdict = rule.Worst(r.Findings)
 	r.Counts = counts(r.Findings)
 	return r, nil
+}
+
+// judge has every rule say what it has to say.
+func (r *Review) judge(e *evidence.Evidence) {
+	type said struct {
+		rule rule.Rule
+		rule.Judgement
+	}
+	var makers []func() []said
+	for _, f := range families() {
+		for _, rl := range f.rules {
+			makers = append(makers, func() []said { return []said{{rl, judged(e, f, rl)}} })
+		}
+	}
+	for _, s := range inTurn(makers...) {
+		r.take(s.rule, s.Judgement)
+	}
 }
 
 // judged is what a rule says, or that its family is left out.

@@ -85,6 +85,12 @@ func (e *Evidence) ShortAt(node string) (Short, error) {
 	})
 }
 
+// outcome is a value or the error instead of it.
+type outcome[T any] struct {
+	value T
+	err   error
+}
+
 // shorts are the shorts at all nodes that a description may name.
 func (e *Evidence) shorts() (map[string]outcome[Short], error) {
 	return remember(e, "shorts", func() (map[string]outcome[Short], error) {

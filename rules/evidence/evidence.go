@@ -2,7 +2,6 @@ package evidence
 
 import (
 	"slices"
-	"sync"
 
 	"kilovet/hv/chain"
 	"kilovet/hv/circuit"
@@ -132,44 +131,6 @@ func (e *Evidence) distinct() []string {
 		}
 	}
 	return names
-}
-
-// memory holds what was computed, by condition and name, for one review.
-type memory struct {
-	lock  sync.Mutex
-	known map[memoryKey]any
-}
-
-type memoryKey struct {
-	condition conditionKey
-	name      string
-}
-
-type outcome[T any] struct {
-	value T
-	err   error
-}
-
-// Remember computes a value once for each condition in a review; the name is its own.
-func Remember[T any](e *Evidence, name string, compute func() (T, error)) (T, error) {
-	return remember(e, "of rules: "+name, compute)
-}
-
-// remember computes a value once for each condition.
-func remember[T any](e *Evidence, name string, compute func() (T, error)) (T, error) {
-	key := memoryKey{e.condition.key(), name}
-	e.memory.lock.Lock()
-	known, ok := e.memory.known[key].(outcome[T])
-	e.memory.lock.Unlock()
-	if ok {
-		return known.value, known.err
-	}
-	var o outcome[T]
-	o.value, o.err = compute()
-	e.memory.lock.Lock()
-	e.memory.known[key] = o
-	e.memory.lock.Unlock()
-	return o.value, o.err
 }
 
 // magnitude is the size of a signed voltage.

@@ -1,8 +1,10 @@
 package main
 
 import (
+	"fmt"
 	"slices"
 	"strings"
+	"sync"
 
 	"github.com/spf13/cobra"
 
@@ -42,35 +44,58 @@ func (r *reviewing) sheetsUsable() error {
 	return nil
 }
 
-// render makes every output before any of them is written; the note stands first.
+// render makes every output, side by side, before any of them is written; the note
+// stands first.
 func (r *reviewing) render(review *rules.Review, note string) (outputs []output, shown []byte, err error) {
-	data, err := json.Render(review)
-	if err != nil {
-		return nil, nil, defect(err)
-	}
+	var makers []maker
 	if r.pdf != "" {
-		sheets, err := pdf.RenderOn(pdf.Paper(r.paper), page.New(review).Noted(note))
-		if err != nil {
-			return nil, nil, defect(err)
-		}
-		outputs = append(outputs, output{r.pdf, sheets})
+		makers = append(makers, maker{r.pdf, func() ([]byte, error) { return pdf.RenderOn(pdf.Paper(r.paper), page.New(review).Noted(note)) }})
 	}
 	if r.html != "" {
-		page, err := html.RenderWith(review, html.Options{Note: note})
-		if err != nil {
-			return nil, nil, defect(err)
-		}
-		outputs = append(outputs, output{r.html, page})
+		makers = append(makers, maker{r.html, func() ([]byte, error) { return html.RenderWith(review, html.Options{Note: note}) }})
+	}
+	makers = append(makers, maker{r.json, func() ([]byte, error) { return json.Render(review) }})
+	outputs, err = made(makers)
+	if err != nil {
+		return nil, nil, err
 	}
 	if r.json == "-" {
-		return outputs, data, nil
-	}
-	if r.json != "" {
-		outputs = append(outputs, output{r.json, data})
+		last := len(outputs) - 1
+		return outputs[:last], outputs[last].data, nil
 	}
 	how := r.manner(r.all)
 	how.Note = note
-	return outputs, text.Render(review, how), nil
+	return slices.DeleteFunc(outputs, func(o output) bool { return o.path == "" }), text.Render(review, how), nil
+}
+
+// maker makes an output; one without a path is made to see that it can be.
+type maker struct {
+	path string
+	make func() ([]byte, error)
+}
+
+// made runs makers side by side. The first in order that fails is told.
+func made(makers []maker) ([]output, error) {
+	outputs, errs := make([]output, len(makers)), make([]error, len(makers))
+	var group sync.WaitGroup
+	for i, m := range makers {
+		group.Go(func() {
+			defer func() {
+				if what := recover(); what != nil {
+					errs[i] = fmt.Errorf("%v%s", what, place())
+				}
+			}()
+			data, err := m.make()
+			outputs[i], errs[i] = output{m.path, data}, err
+		})
+	}
+	group.Wait()
+	for _, err := range errs {
+		if err != nil {
+			return nil, defect(err)
+		}
+	}
+	return outputs, nil
 }
 
 // writable refuses outputs before anything is computed: sheets on standard output, and

@@ -30,7 +30,7 @@ type curve struct {
 type exhibited struct {
 	ID, Title, Note, Basis string
 	Columns                []column
-	Rows                   [][]string
+	Rows                   template.HTML
 }
 
 type column struct {
@@ -73,12 +73,14 @@ func exhibitedOf(id string, t exhibit.Table) exhibited {
 		words := slices.ContainsFunc(t.Rows, func(row []exhibit.Cell) bool { return row[i].Value == nil && row[i].Text != "" })
 		out.Columns = append(out.Columns, column{clean(c.Head), c.Unit != "" && !words})
 	}
+	var rows [][]string
 	for _, row := range t.Rows {
 		var cells []string
 		for i, cell := range row {
 			cells = append(cells, clean(digest.Cell(t.Columns[i].Unit, cell.Value, cell.Text)))
 		}
-		out.Rows = append(out.Rows, cells)
+		rows = append(rows, cells)
 	}
+	out.Rows = rowsOf(out.Columns, rows)
 	return out
 }

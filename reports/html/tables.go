@@ -1,6 +1,8 @@
 package html
 
 import (
+	"html/template"
+
 	"kilovet/reports/digest"
 	"kilovet/rules/figure"
 )
@@ -9,7 +11,13 @@ import (
 type table struct {
 	ID, Title string
 	Columns   []string
-	Groups    []digest.Group
+	Groups    []group
+}
+
+// group is the figures that share id, meaning and basis.
+type group struct {
+	ID, What, Basis string
+	Rows            template.HTML
 }
 
 // figureTables are the figures of a chapter that depend on the state, and the others.
@@ -25,15 +33,12 @@ func figureTables(id string, figures []figure.Figure) []table {
 	return all
 }
 
-func cleanGroups(groups []digest.Group) []digest.Group {
-	for i := range groups {
-		g := &groups[i]
-		g.ID, g.What, g.Basis = clean(g.ID), clean(g.What), clean(g.Basis)
-		for j := range g.Rows {
-			g.Rows[j].Subject = clean(g.Rows[j].Subject)
-		}
+func cleanGroups(groups []digest.Group) []group {
+	all := make([]group, len(groups))
+	for i, g := range groups {
+		all[i] = group{clean(g.ID), clean(g.What), clean(g.Basis), figureRows(g)}
 	}
-	return groups
+	return all
 }
 
 // Span is how many columns a row over all of them takes.

@@ -182,7 +182,7 @@ func (c *canvas) FillString(f font.Face, p vg.Point, text string) {
 		cut, cutName = bold, "B"
 	}
 	r, g, b := rgb(c.now.ink)
-	c.out.SetTextColor(r, g, b)
+	c.out.write(r, g, b)
 	c.out.SetFont(family, cutName, float64(f.Font.Size/vg.Points(1))*c.now.size())
 	text = c.out.fonts.guard(cut, text)
 	angle := -math.Atan2(c.now.b, c.now.a) * 180 / math.Pi

@@ -31,17 +31,23 @@ const points = 25.4 / 72
 type fonts struct {
 	faces  [2]*sfnt.Font
 	widths [2]map[rune]float64 // in em; absent glyphs are negative
+	plain  [2][128]float64     // the same of the first runes; of those that are no letters nought
 	buffer sfnt.Buffer
+
+	wrapped map[wanted][]set
 }
 
 func newFonts() (*fonts, error) {
-	f := &fonts{widths: [2]map[rune]float64{{}, {}}}
+	f := &fonts{widths: [2]map[rune]float64{{}, {}}, wrapped: map[wanted][]set{}}
 	for i, data := range [2][]byte{dejavusans.TTF, dejavusansbold.TTF} {
 		parsed, err := sfnt.Parse(data)
 		if err != nil {
 			return nil, fmt.Errorf("pdf: font: %w", err)
 		}
 		f.faces[i] = parsed
+		for r := ' '; r <= '~'; r++ {
+			f.plain[i][r] = f.advance(face(i), r)
+		}
 	}
 	return f, nil
 }
@@ -49,6 +55,9 @@ func newFonts() (*fonts, error) {
 // guard makes a text fit for a face: on one line, and with every rune the library
 // or the face does not know replaced visibly.
 func (f *fonts) guard(c face, s string) string {
+	if plain(s) {
+		return s
+	}
 	return strings.Map(func(r rune) rune {
 		if r > 0xFFFF || f.em(c, r) < 0 {
 			return utf8.RuneError
@@ -57,8 +66,21 @@ func (f *fonts) guard(c face, s string) string {
 	}, digest.Clean(s))
 }
 
+// plain reports whether a text holds nothing but signs that every face has.
+func plain(s string) bool {
+	for i := range len(s) {
+		if s[i] < ' ' || s[i] > '~' {
+			return false
+		}
+	}
+	return true
+}
+
 // em is the advance of a rune in em; negative where the face has no glyph.
 func (f *fonts) em(c face, r rune) float64 {
+	if r >= ' ' && r <= '~' {
+		return f.plain[c][r]
+	}
 	w, known := f.widths[c][r]
 	if !known {
 		w = f.advance(c, r)

@@ -23,6 +23,15 @@ type painter struct {
 	fonts *fonts
 	links map[string]int
 	err   error // what a picture could not draw
+	ink   [3]int
+}
+
+// write sets the colour of text, once for all that has it.
+func (p *painter) write(r, g, b int) {
+	if want := [3]int{r, g, b}; p.ink != want {
+		p.ink = want
+		p.SetTextColor(r, g, b)
+	}
 }
 
 // written is text on a base line.
@@ -79,7 +88,7 @@ func (w written) draw(out *painter) {
 		ink = 255
 	}
 	out.SetFont(family, cut, w.style.size)
-	out.SetTextColor(ink, ink, ink)
+	out.write(ink, ink, ink)
 	out.Text(w.x, w.y, w.text)
 }
 

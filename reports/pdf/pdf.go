@@ -34,8 +34,11 @@ func RenderOn(p Paper, d *page.Document) ([]byte, error) {
 	if err != nil {
 		return nil, err
 	}
+	names := fonts.names(d.Block)
+	empty := make(chan *gofpdf.Fpdf, 1)
+	go func() { empty <- blank(p, d.Block, names) }() // which reads the fonts meanwhile
 	w := layout(fonts, p.area(), pen, d)
-	out := &painter{Fpdf: blank(fonts, p, d.Block), fonts: fonts, links: map[string]int{}}
+	out := &painter{Fpdf: <-empty, fonts: fonts, links: map[string]int{}}
 	w.announce(out)
 	for i, s := range w.sheets {
 		out.AddPage()
@@ -43,11 +46,28 @@ func RenderOn(p Paper, d *page.Document) ([]byte, error) {
 			return nil, fmt.Errorf("pdf: sheet %d: %w", i+1, err)
 		}
 	}
-	var file bytes.Buffer
-	if err := out.Output(&file); err != nil {
+	return finished(out, d.Block)
+}
+
+// finished is the bytes of the file, compressed, and without moments that nobody named.
+func finished(out *painter, block page.TitleBlock) ([]byte, error) {
+	var plain bytes.Buffer
+	plain.Grow(2 << 20)
+	if err := out.Output(&plain); err != nil {
 		return nil, fmt.Errorf("pdf: %w", err)
 	}
-	return withoutMoment(withoutMoment(file.Bytes(), "CreationDate", issued(d.Block)), "ModDate", undated), nil
+	file, err := deflated(plain.Bytes())
+	if err != nil {
+		return nil, fmt.Errorf("pdf: %w", err)
+	}
+	return withoutMoment(withoutMoment(file, "CreationDate", issued(block)), "ModDate", undated), nil
+}
+
+// names are what the file says of itself.
+type names struct{ title, program string }
+
+func (f *fonts) names(b page.TitleBlock) names {
+	return names{f.guard(regular, b.Title), f.guard(regular, b.Program)}
 }
 
 // issued is the date of issue where it is written as ISO 8601 has it; else undated.
@@ -71,15 +91,16 @@ func withoutMoment(file []byte, key string, moment time.Time) []byte {
 }
 
 // blank is a file without sheets. The library writes into the fonts it is given.
-func blank(fonts *fonts, p Paper, block page.TitleBlock) *gofpdf.Fpdf {
+func blank(p Paper, block page.TitleBlock, n names) *gofpdf.Fpdf {
 	width, height := p.size()
 	out := gofpdf.NewCustom(&gofpdf.InitType{OrientationStr: "P", UnitStr: "mm", Size: gofpdf.SizeType{Wd: width, Ht: height}})
+	out.SetCompression(false) // see deflated
 	out.SetCatalogSort(true)
 	out.SetCreationDate(issued(block))
 	out.SetModificationDate(undated)
 	out.SetAutoPageBreak(false, 0)
-	out.SetTitle(fonts.guard(regular, block.Title), true)
-	out.SetCreator(fonts.guard(regular, block.Program), true)
+	out.SetTitle(n.title, true)
+	out.SetCreator(n.program, true)
 	out.AddUTF8FontFromBytes(family, "", bytes.Clone(dejavusans.TTF))
 	out.AddUTF8FontFromBytes(family, "B", bytes.Clone(dejavusansbold.TTF))
 	return out

@@ -362,7 +362,7 @@ func TestCutTextShowsIt(t *testing.T) {
 
 func TestACoordinateThatIsNoNumberIsRefused(t *testing.T) {
 	for _, v := range []float64{math.NaN(), math.Inf(1)} {
-		out := &painter{Fpdf: blank(testFonts(t), A4, page.TitleBlock{})}
+		out := &painter{Fpdf: blank(A4, page.TitleBlock{}, names{})}
 		out.AddPage()
 		s := &sheet{}
 		s.add(stroke{0, 0, v, 1, 0.1, 0})

@@ -1,6 +1,7 @@
 package pdf
 
 import (
+	"slices"
 	"strings"
 
 	"kilovet/reports/page"
@@ -49,29 +50,74 @@ type set struct {
 	sheet string // an anchor; the number of its sheet stands in place of the text
 }
 
+// wanted is a text in a style and a width.
+type wanted struct {
+	style style
+	text  string
+	width float64
+}
+
 // wrap breaks a text into lines of a width: at spaces, in a word too long for a
-// line after one of its joints, and failing that anywhere.
+// line after one of its joints, and failing that anywhere. What is asked for again is
+// remembered; the lines belong to all who asked.
 func (f *fonts) wrap(t style, s string, width float64) []set {
+	if s == "" {
+		return nil
+	}
+	asked := wanted{t, s, width}
+	lines, known := f.wrapped[asked]
+	if !known {
+		lines = slices.Clip(f.broken(t, spaced(f.guard(t.face, s)), width))
+		f.wrapped[asked] = lines
+	}
+	return lines
+}
+
+// spaced has one space between words and none around them.
+func spaced(s string) string {
+	if !strings.Contains(s, "  ") && !strings.HasPrefix(s, " ") && !strings.HasSuffix(s, " ") {
+		return s
+	}
+	return strings.Join(strings.Fields(s), " ")
+}
+
+// broken breaks a text whose words have one space between them.
+func (f *fonts) broken(t style, s string, width float64) []set {
 	var lines []set
-	line := ""
-	for _, w := range strings.Fields(f.guard(t.face, s)) {
-		if joined := strings.TrimSpace(line + " " + w); f.width(t, joined) <= width {
-			line = joined
+	end := 0      // of the words that fit
+	length := 0.0 // of those, in em
+	for at := 0; at < len(s); {
+		next := at
+		reach := length
+		if end > 0 {
+			reach += f.em(t.face, ' ')
+			next++
+		}
+		word := len(s)
+		if i := strings.IndexByte(s[next:], ' '); i >= 0 {
+			word = next + i
+		}
+		for _, r := range s[next:word] {
+			reach += f.em(t.face, r)
+		}
+		if reach*t.size*points <= width {
+			end, length, at = word, reach, word
 			continue
 		}
-		if line != "" {
-			lines = append(lines, set{style: t, text: line})
+		if end > 0 {
+			lines = append(lines, set{style: t, text: s[:end]})
+			s, at = s[end+1:], 0
+		} else {
+			cut := f.joint(t, s[:word], width)
+			lines = append(lines, set{style: t, text: s[:cut]})
+			s, at = strings.TrimPrefix(s[cut:], " "), 0
 		}
-		line = w
-		for f.width(t, line) > width {
-			at := f.joint(t, line, width)
-			lines, line = append(lines, set{style: t, text: line[:at]}), line[at:]
-		}
+		end, length = 0, 0
 	}
-	if line == "" {
+	if s == "" {
 		return lines
 	}
-	return append(lines, set{style: t, text: line})
+	return append(lines, set{style: t, text: s})
 }
 
 // joint is where to break a word that is longer than the width: after the last
@@ -100,7 +146,7 @@ func (f *fonts) fit(t style, s string, width float64, most int) []set {
 	if len(lines) <= most {
 		return lines
 	}
-	lines = lines[:most]
+	lines = slices.Clone(lines[:most])
 	last := []rune(lines[most-1].text)
 	for len(last) > 0 && f.width(t, string(last)+"…") > width {
 		last = last[:len(last)-1]

@@ -62,14 +62,15 @@ func tracked(g gap.Gap, v gap.Voltages, group table.Group) (gap.Answer[quantity.
 	if err != nil {
 		return gap.Answer[quantity.Length]{}, err
 	}
-	return withRibs(g, v, on, stepped(g, v.LongTerm, group, r)), nil
+	return withRibs(g, v, on, stepped(g, v.LongTerm, group.String(), r)), nil
 }
 
-// stepped is a reading of Table F.5 as an answer, twice it for reinforced insulation.
-func stepped(g gap.Gap, longTerm quantity.Voltage, group table.Group, r table.Reading[quantity.Length]) gap.Answer[quantity.Length] {
+// stepped is a reading of Table F.5 of some material as an answer, twice it for reinforced
+// insulation.
+func stepped(g gap.Gap, longTerm quantity.Voltage, of string, r table.Reading[quantity.Length]) gap.Answer[quantity.Length] {
 	a := gap.Answer[quantity.Length]{
 		Value:   r.Value,
-		Because: fmt.Sprintf("%s long-term on %s: %s, %s", quantity.Text(longTerm), group, r.Source.Text, r.Rows),
+		Because: fmt.Sprintf("%s long-term on %s: %s, %s", quantity.Text(longTerm), of, r.Source.Text, r.Rows),
 		Sources: []gap.Source{r.Source.Governing()},
 	}
 	if g.Class() == gap.Reinforced {

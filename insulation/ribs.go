@@ -47,7 +47,7 @@ func withRibs(g gap.Gap, v gap.Voltages, on table.Surface, plain gap.Answer[quan
 	if g.Ribs.Count == 0 || err != nil {
 		return plain
 	}
-	reduced := stepped(g, v.LongTerm, on.Group, r)
+	reduced := stepped(g, v.LongTerm, on.Group.String(), r)
 	if !quantity.AtMost(reduced.Value*(1+1e-6), plain.Value) {
 		return plain // no figure in brackets
 	}

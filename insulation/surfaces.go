@@ -21,7 +21,7 @@ const inHand = 1.25
 func alongTested(g gap.Gap, v gap.Voltages) (gap.Answer[quantity.Length], error) {
 	t := g.Tested
 	if t.Voltage <= 0 || t.Length <= 0 {
-		return gap.Answer[quantity.Length]{}, lack.Because(fmt.Sprintf("no table of surfaces in %s was found: give the flashover of a tested one", named(g)), "spacing.tested_voltage", "spacing.tested_length")
+		return gap.Answer[quantity.Length]{}, lack.Because(fmt.Sprintf("no figure of %s was found: give the flashover of a tested one", surfacesIn(g)), "spacing.tested_voltage", "spacing.tested_length")
 	}
 	ratio := inHand * float64(v.Peak/t.Voltage)
 	a := gap.Answer[quantity.Length]{
@@ -31,12 +31,22 @@ func alongTested(g gap.Gap, v gap.Voltages) (gap.Answer[quantity.Length], error)
 			{Text: "tested: " + quantity.Text(t.Voltage) + " over " + quantity.Text(t.Length) + ", as the description says", Mark: gap.Read, Governs: true},
 			{Text: "80 % of the flashover are used; it grows with the root of a longer length", Mark: gap.Practice},
 		},
-		Assumptions: []string{"flashover in " + named(g) + " grows as the root of a longer length than the tested one"},
+		Assumptions: []string{"the flashover of " + surfacesIn(g) + " grows as the root of a longer length than the tested one"},
 	}
-	if c, err := ClearanceNeeded(g, v); err == nil && c.Value > a.Value {
+	stepped := g
+	stepped.Insulation = gap.Basic // the voltages are those of its class already
+	if c, err := ClearanceNeeded(stepped, v); err == nil && c.Value > a.Value {
 		return raised(a, c), nil
 	}
 	return a, nil
+}
+
+// surfacesIn says what a surface in the medium of a gap is.
+func surfacesIn(g gap.Gap) string {
+	if g.Medium == gap.Solid {
+		return "joints of solids"
+	}
+	return "surfaces in " + named(g)
 }
 
 // named is the medium in words, the gas by its name.

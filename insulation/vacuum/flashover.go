@@ -149,7 +149,7 @@ func (r Reference) suits(g gap.Gap) error {
 	case g.Material == "":
 		return lack.Key("spacing.material")
 	case !sameMaterial(g.Material, r.Material):
-		return lack.Range("flashover in vacuum has a figure for %s only, not for %s: give a tested pair", r.Material, g.Material)
+		return lack.Because(fmt.Sprintf("flashover in vacuum has a figure for %s only, not for %s: give the flashover of a tested one", r.Material, g.Material), "spacing.tested_voltage", "spacing.tested_length")
 	}
 	return nil
 }

@@ -37,6 +37,16 @@ func (x Spacing) SurfaceFor(v quantity.Voltage) (quantity.Length, error) {
 	return insulation.CreepageForFlashover(x.Gap, v)
 }
 
+// SurfaceBounds are what is known of the length of surface where no figure of it is.
+func (x Spacing) SurfaceBounds() insulation.SurfaceBounds {
+	return insulation.CreepageBounds(x.Gap, x.Voltages)
+}
+
+// BreakdownBound is what the gap cannot stand more than where no law of its gas answers.
+func (x Spacing) BreakdownBound() (gap.Answer[quantity.Voltage], error) {
+	return insulation.BreakdownBound(x.Gap, x.Voltages.Sharp)
+}
+
 // RadiusForOnset is the sharpest radius at which a discharge starts at a voltage.
 func (x Spacing) RadiusForOnset(v quantity.Voltage) (quantity.Length, error) {
 	return insulation.RadiusForOnset(x.Gap, v)

@@ -78,6 +78,9 @@ func distance(e *evidence.Evidence, s *chain.Spacing, id string, given document.
 		return f.Lacking(err)
 	}
 	need := needed(x)
+	if need.Lack != nil && id == "spacing.creepage" && untested(need.Lack) {
+		return bounded(f, s, x, need.Lack)
+	}
 	if need.Lack != nil {
 		f = f.Lacking(need.Lack)
 		if given.Set() && need.Lack.Kind != lack.Missing {

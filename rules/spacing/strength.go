@@ -50,7 +50,7 @@ func judgeBreakdown(e *evidence.Evidence, s *chain.Spacing) rule.Finding {
 	}
 	stands := x.Assessment.Breakdown
 	if stands.Lack != nil {
-		return f.Lacking(stands.Lack)
+		return notAnswered(f, x)
 	}
 	f.Under = x.Under.Text()
 	f.Sources = append(append(rule.Cited(stands.Sources), breakdownSource), shown(stands.Answer)...)

@@ -1,0 +1,65 @@
+package spacing_test
+
+import (
+	"fmt"
+	"strings"
+	"testing"
+
+	"kilovet/rules/rule"
+)
+
+// Surfaces without a figure of their own: too short fails by the medium itself, long enough
+// is marginal on its assumption, between the two it is unassessed with both said and what
+// to give; never a plain pass. More surface never makes it worse.
+func TestSurfacesWithoutAFigure(t *testing.T) {
+	at := func(medium string, creepage float64) rule.Finding {
+		return findings(t, site(100)+fmt.Sprintf("[[spacing]]\nname = \"g\"\nvoltage = \"20 kV\"\nclearance = \"1 mm\"\ncreepage = \"%g mm\"\nshape = { kind = \"plates\" }\n%s", creepage, medium))["spacing.creepage | g"]
+	}
+	for medium, c := range map[string]struct {
+		short, between, long float64
+		says                 string
+	}{
+		"medium = \"oil\"\n":                                                      {9.9, 79, 81, "lie between 10 mm"},
+		"medium = \"solid\"\nmaterial = \"epoxy\"\n":                              {5, 79, 81, "lie between 5.7"},
+		"medium = \"gas\"\ngas = \"helium\"\npressure = \"1013 mbar\"\n":          {8, 500, 0, "are more than 8.3"},
+		"medium = \"gas\"\ngas = \"argon\"\npressure = \"1013 mbar\"\n":           {8, 500, 0, "are more than 8.3"},
+		"medium = \"gas\"\ngas = \"hydrogen\"\npressure = \"1013 mbar\"\n":        {8, 500, 0, "are more than 8.3"},
+		"medium = \"vacuum\"\nmaterial = \"PTFE\"\njunction_angle = \"80 deg\"\n": {1.6, 250, 0, "are more than 1.64"},
+	} {
+		last := rule.Fails
+		for _, creepage := range []float64{1, c.short, c.short * 1.1, c.between, c.between * 1.1, c.between * 1.2} {
+			f := at(medium, creepage)
+			if rule.Graver(f.Verdict, last) {
+				t.Errorf("%s%g mm: %s after %s", medium, creepage, f.Verdict, last)
+			}
+			last = f.Verdict
+		}
+		if f := at(medium, c.short); f.Verdict != rule.Fails || f.Margin == nil {
+			t.Errorf("%s%g mm: %s: %s", medium, c.short, f.Verdict, f.Because)
+		}
+		f := at(medium, c.between)
+		if f.Verdict != rule.Unassessed || !strings.Contains(f.Because, c.says) || len(f.Missing) != 2 || !strings.Contains(f.Remedy, "spacing.tested_voltage") {
+			t.Errorf("%s%g mm: %s: %s; %v; %s", medium, c.between, f.Verdict, f.Because, f.Missing, f.Remedy)
+		}
+		if c.long == 0 {
+			continue
+		}
+		if f := at(medium, c.long); f.Verdict != rule.Marginal || len(f.Assumptions) == 0 {
+			t.Errorf("%s%g mm: %s: %s", medium, c.long, f.Verdict, f.Because)
+		}
+	}
+}
+
+// A gap of helium of which no law answers fails where air would, and proves nothing where
+// air would hold.
+func TestGapsOfWeakGases(t *testing.T) {
+	at := func(clearance float64) rule.Finding {
+		return findings(t, site(100)+fmt.Sprintf("[[spacing]]\nname = \"g\"\nvoltage = \"20 kV\"\nclearance = \"%g mm\"\nmedium = \"gas\"\ngas = \"helium\"\npressure = \"1013 mbar\"\nshape = { kind = \"plates\" }\n", clearance))["spacing.breakdown | g"]
+	}
+	if f := at(7); f.Verdict != rule.Fails || !strings.Contains(f.Because, "more than which helium does not stand") {
+		t.Errorf("%s: %s", f.Verdict, f.Because)
+	}
+	if f := at(100); f.Verdict != rule.Unassessed || !strings.Contains(f.Because, "no pass") {
+		t.Errorf("%s: %s", f.Verdict, f.Because)
+	}
+}

@@ -29,16 +29,14 @@ func CreepageBounds(g gap.Gap, v gap.Voltages) SurfaceBounds {
 	return b
 }
 
-// aloneNeeded is what the medium alone needs over the surface: the clearance asked for
-// where one is, which the creepage is never under, else the distance between plates whose
-// breakdown is a quarter above the peak.
+// aloneNeeded is what the medium alone needs between plates: the clearance asked for where
+// one is, which the creepage is never under, else the distance whose breakdown is a quarter
+// above the peak.
 func aloneNeeded(g gap.Gap, v gap.Voltages) (gap.Answer[quantity.Length], error) {
 	if g.Medium == gap.Oil || g.Medium == gap.Solid {
-		if g.Shape == nil {
-			g.Shape = &gap.Shape{Kind: gap.Plates}
-		}
+		g.Shape = &gap.Shape{Kind: gap.Plates}
 		a, err := ClearanceNeeded(g, v)
-		a.Because = "the clearance needed, which a surface is never under: " + a.Because
+		a.Because = "the clearance needed between plates, which a surface is never under: " + a.Because
 		a.Assumptions = nil // a lower bound is none the weaker for them
 		return a, err
 	}
@@ -88,19 +86,4 @@ func cleanSurface(g gap.Gap, v gap.Voltages, least gap.Result[quantity.Length]) 
 		a.Value, a.Because = least.Value, least.Because
 	}
 	return a, nil
-}
-
-// BreakdownBound is a voltage that a gap in helium, argon, hydrogen or carbon dioxide of
-// which no law answers cannot stand more than: that of air of the same pressure between the
-// same electrodes, from a millimetre at normal density on. It is never a pass.
-func BreakdownBound(g gap.Gap, sharp gap.Polarity) (gap.Answer[quantity.Voltage], error) {
-	if !weaker(g) || g.Clearance < 1e-3 {
-		return gap.Answer[quantity.Voltage]{}, lack.Range("no bound of the breakdown in %s is known", named(g))
-	}
-	air := g
-	air.Gas = gap.AirGas
-	a, err := Breakdown(air, sharp)
-	a.Because = "air, more than which " + named(g) + " does not stand: " + a.Because
-	a.Sources = append(a.Sources, gap.Source{Text: named(g) + " stands less than air of the same pressure over insulating distances", Mark: gap.Memory})
-	return a, err
 }

@@ -1,6 +1,8 @@
 package insulation
 
 import (
+	"slices"
+
 	"kilovet/hv/quantity"
 	"kilovet/insulation/gap"
 	"kilovet/insulation/oil"
@@ -38,7 +40,7 @@ func alongInVacuum(g gap.Gap, v gap.Voltages) (gap.Answer[quantity.Length], erro
 }
 
 // acrossVacuum is what a gap in vacuum stands: where an insulator bridges it, the lower
-// of the gap itself and the flashover of its surface.
+// of the gap itself and the flashover of its surface, on what both rest.
 func acrossVacuum(g gap.Gap) (gap.Answer[quantity.Voltage], error) {
 	if g.Clearance <= 0 && g.Creepage > 0 {
 		return vacuum.Flashover(g, vacuum.ReferenceOf(g))
@@ -48,8 +50,24 @@ func acrossVacuum(g gap.Gap) (gap.Answer[quantity.Voltage], error) {
 		return across, err
 	}
 	along, err := vacuum.Flashover(g, vacuum.ReferenceOf(g))
-	if err != nil || along.Value < across.Value {
+	switch {
+	case err != nil:
 		return along, err
+	case along.Value < across.Value:
+		along.Assumptions = union(along.Assumptions, across.Assumptions)
+		return along, nil
 	}
+	across.Assumptions = union(across.Assumptions, along.Assumptions)
 	return across, nil
+}
+
+// union are the texts of both, each once.
+func union(a, b []string) []string {
+	all := slices.Clone(a)
+	for _, t := range b {
+		if !slices.Contains(all, t) {
+			all = append(all, t)
+		}
+	}
+	return all
 }

@@ -46,6 +46,20 @@ func ClearanceNeeded(g gap.Gap, v gap.Voltages) (gap.Answer[quantity.Length], er
 	return a, nil
 }
 
+// WorkingVoltage is the peak voltage of a gap of oil at which its peak field is 2 kV/mm.
+func WorkingVoltage(g gap.Gap) (gap.Answer[quantity.Voltage], error) {
+	l, err := lineOf(g)
+	if err != nil {
+		return gap.Answer[quantity.Voltage]{}, err
+	}
+	if !quantity.AtLeast(l.Gap(), closestSmall) || !quantity.AtMost(l.Gap(), widestSmall) {
+		return gap.Answer[quantity.Voltage]{}, lack.Range("the working stress of oil is that of gaps of 0.1 to 50 mm, asked for %s", quantity.Text(l.Gap()))
+	}
+	return gap.Answer[quantity.Voltage]{
+		Value: quantity.Voltage(float64(WorkingField) / float64(l.PerVolt(0))), Because: "2 kV/mm in oil", Sources: []gap.Source{workingSource.Governing()},
+	}, nil
+}
+
 // gapAt is the gap whose peak field at a voltage is a limit, the closest small one where
 // that stands more.
 func gapAt(g gap.Gap, v quantity.Voltage, limit quantity.Field) (quantity.Length, error) {

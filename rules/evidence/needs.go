@@ -22,6 +22,20 @@ func (x Spacing) RadiusFor(v quantity.Voltage) (quantity.Length, error) {
 	return insulation.RadiusForBreakdown(x.Gap, v, x.Voltages.Sharp)
 }
 
+// AtWork is the peak that the distance bears at most by the law which asks for it, in
+// vacuum, oil and solids.
+func (x Spacing) AtWork() (gap.Answer[quantity.Voltage], error) {
+	return insulation.WorkingAtMost(x.Gap)
+}
+
+// RadiusAtWork is the sharpest radius with which the distance bears a peak.
+func (x Spacing) RadiusAtWork(v quantity.Voltage) (quantity.Length, error) {
+	return insulation.RadiusForWork(x.Gap, v)
+}
+
+// Dimensioned is the peak that the class of insulation is dimensioned for.
+func (x Spacing) Dimensioned() quantity.Voltage { return x.Voltages.For(x.Gap.Class()).Peak }
+
 // IfNegative is what the spacing would stand with its sharper electrode negative, where
 // the polarity is not known.
 func (x Spacing) IfNegative() (quantity.Voltage, error) {
@@ -42,9 +56,14 @@ func (x Spacing) SurfaceBounds() insulation.SurfaceBounds {
 	return insulation.CreepageBounds(x.Gap, x.Voltages)
 }
 
-// BreakdownBound is what the gap cannot stand more than where no law of its gas answers.
-func (x Spacing) BreakdownBound() (gap.Answer[quantity.Voltage], error) {
-	return insulation.BreakdownBound(x.Gap, x.Voltages.Sharp)
+// BreakdownBounds are what is known of the breakdown where no law gives it.
+func (x Spacing) BreakdownBounds() insulation.StrengthBounds {
+	return insulation.BreakdownBounds(x.Gap, x.Voltages.Sharp)
+}
+
+// OnsetAtLeast is the voltage under which no discharge starts where no law gives the onset.
+func (x Spacing) OnsetAtLeast() (gap.Answer[quantity.Voltage], error) {
+	return insulation.OnsetAtLeast(x.Gap)
 }
 
 // RadiusForOnset is the sharpest radius at which a discharge starts at a voltage.

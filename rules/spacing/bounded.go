@@ -76,24 +76,3 @@ func longer(s *chain.Spacing, b insulation.SurfaceBounds, counted quantity.Lengt
 	}
 	return wider(s, s.Creepage, b.Enough.Value+s.Creepage.V-counted)
 }
-
-// notAnswered judges a gap that no law answers: it fails where even what is stronger would,
-// and is unassessed where that would hold, which proves nothing.
-func notAnswered(f rule.Finding, x evidence.Spacing) rule.Finding {
-	why := x.Assessment.Breakdown.Lack
-	top, err := x.BreakdownBound()
-	if err != nil {
-		return f.Lacking(why)
-	}
-	f.Because = fmt.Sprintf("%s across a gap that stands at most %s (%s)", quantity.Text(x.Voltages.Peak), quantity.Text(top.Value), top.Because)
-	limit := top.Value * limits.BreakdownShare
-	if quantity.AtMost(x.Voltages.Peak, limit) {
-		f.Because += ", an upper limit and no pass"
-		return f.Lacking(why)
-	}
-	f.Under = x.Under.Text()
-	f.Sources = append(rule.Cited(top.Sources), breakdownSource)
-	f = f.ShareOf(rule.Of(top.Value)).Most(rule.Of(x.Voltages.Peak), rule.Of(limit), 0)
-	f.Remedy = "widen the gap or take a stronger gas, or lower the voltage"
-	return f
-}

@@ -50,7 +50,7 @@ func judgeBreakdown(e *evidence.Evidence, s *chain.Spacing) rule.Finding {
 	}
 	stands := x.Assessment.Breakdown
 	if stands.Lack != nil {
-		return notAnswered(f, x)
+		return unanswered(f, x, s.Field.Set())
 	}
 	f.Under = x.Under.Text()
 	f.Sources = append(append(rule.Cited(stands.Sources), breakdownSource), shown(stands.Answer)...)
@@ -105,7 +105,11 @@ func judgeCorona(e *evidence.Evidence, s *chain.Spacing) (rule.Finding, string) 
 	}
 	onset := x.Assessment.Onset
 	if onset.Lack != nil {
-		return f.Lacking(onset.Lack), ""
+		least, err := x.OnsetAtLeast()
+		if err != nil || s.Field.Set() || !quantity.AtMost(x.Voltages.Peak, least.Value) {
+			return f.Lacking(onset.Lack), ""
+		}
+		onset.Answer = least
 	}
 	f.Under = x.Under.Text()
 	f.Sources = append(append(rule.Cited(onset.Sources), coronaSource), shown(onset.Answer)...)

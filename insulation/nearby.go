@@ -1,0 +1,113 @@
+package insulation
+
+import (
+	"kilovet/hv/lack"
+	"kilovet/hv/quantity"
+	"kilovet/insulation/gap"
+)
+
+// StrengthBounds are what is known of a voltage that no law gives at the distance of a gap:
+// more distance between the same electrodes never stands less, so a narrower gap that a law
+// answers bounds it from below and a wider one from above. What lies under the lower one
+// holds, what lies above the upper one does not; between them nothing is known.
+type StrengthBounds struct {
+	Least gap.Result[quantity.Voltage]
+	Most  gap.Result[quantity.Voltage]
+}
+
+// BreakdownBounds bounds the breakdown of a gap. The lower bound is one of air and gases,
+// whose laws also hold left of the Paschen minimum, and of surfaces in vacuum; the upper one
+// also that helium, argon, hydrogen and carbon dioxide stand no more than air.
+func BreakdownBounds(g gap.Gap, sharp gap.Polarity) StrengthBounds {
+	law := func(g gap.Gap) (gap.Answer[quantity.Voltage], error) { return Breakdown(g, sharp) }
+	b := StrengthBounds{gap.ResultOf(narrower(g, law)), gap.ResultOf(wider(g, law))}
+	if b.Most.Lack != nil && weaker(g) {
+		b.Most = gap.ResultOf(asAir(g, sharp))
+	}
+	return b
+}
+
+// OnsetAtLeast is the voltage under which no discharge starts in a gap whose onset no law
+// gives at its distance.
+func OnsetAtLeast(g gap.Gap) (gap.Answer[quantity.Voltage], error) { return narrower(g, Onset) }
+
+// WorkingAtMost is WorkingVoltage, or that of a wider gap where no law answers the gap's own
+// distance.
+func WorkingAtMost(g gap.Gap) (gap.Answer[quantity.Voltage], error) {
+	a, err := WorkingVoltage(g)
+	if l := lack.Of(err); l == nil || l.Kind == lack.Missing {
+		return a, err
+	}
+	return wider(g, WorkingVoltage)
+}
+
+type law func(gap.Gap) (gap.Answer[quantity.Voltage], error)
+
+// narrower is the answer of the widest narrower gap that a law answers.
+func narrower(g gap.Gap, of law) (gap.Answer[quantity.Voltage], error) {
+	switch {
+	case g.Medium == gap.Vacuum && g.Creepage > longestInVacuum:
+		g.Creepage = longestInVacuum
+		a, err := of(g)
+		a.Because += "; as along 300 mm, where the law ends: a longer surface stands no less"
+		return a, err
+	case g.Medium != gap.Air && g.Medium != gap.InGas:
+		return gap.Answer[quantity.Voltage]{}, lack.Range("no gap bounds that in %s from below", named(g))
+	}
+	return nearest(g, 1/stepOfGaps, "stands no less", of)
+}
+
+// wider is the answer of the narrowest wider gap that a law answers.
+func wider(g gap.Gap, of law) (gap.Answer[quantity.Voltage], error) {
+	return nearest(g, stepOfGaps, "stands no more", of)
+}
+
+const (
+	stepOfGaps                      = 1.1
+	mostSteps                       = 120 // a factor of 90 000
+	longestInVacuum quantity.Length = 300e-3
+)
+
+// nearest looks for a gap that a law answers, from that of the electrodes on by a ratio;
+// where a key is missing, none can.
+func nearest(g gap.Gap, ratio float64, stands string, of law) (gap.Answer[quantity.Voltage], error) {
+	at := func(d float64) (gap.Answer[quantity.Voltage], error) {
+		n := withGap(g, quantity.Length(d))
+		n.Creepage = g.Creepage * quantity.Length(d) / g.Clearance
+		return of(n)
+	}
+	if g.Clearance <= 0 {
+		return gap.Answer[quantity.Voltage]{}, lack.Key("spacing.clearance")
+	}
+	d := float64(g.Clearance)
+	first, err := at(d)
+	if err == nil || lack.Of(err).Kind == lack.Missing {
+		return first, err
+	}
+	answers := func(d float64) bool { _, err := at(d); return err == nil }
+	for range mostSteps {
+		last := d
+		if d *= ratio; !answers(d) {
+			continue
+		}
+		d = edge(d, last, answers)
+		a, err := at(d)
+		a.Because += "; as over " + quantity.Text(quantity.Length(d)) + ", where the law ends: this gap " + stands
+		return a, err
+	}
+	return gap.Answer[quantity.Voltage]{}, err
+}
+
+// asAir is what air of the same pressure between the same electrodes stands, from a
+// millimetre on: a bound of the gases that stand less, never a pass.
+func asAir(g gap.Gap, sharp gap.Polarity) (gap.Answer[quantity.Voltage], error) {
+	if g.Shape == nil {
+		return gap.Answer[quantity.Voltage]{}, lack.Key("spacing.shape")
+	}
+	air := withGap(g, max(g.Clearance, 1e-3))
+	air.Gas = gap.AirGas
+	a, err := Breakdown(air, sharp)
+	a.Because = "air, more than which " + named(g) + " does not stand: " + a.Because
+	a.Sources = append(a.Sources, gap.Source{Text: named(g) + " stands less than air of the same pressure over insulating distances", Mark: gap.Memory})
+	return a, err
+}

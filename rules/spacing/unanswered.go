@@ -1,0 +1,60 @@
+package spacing
+
+import (
+	"fmt"
+
+	"kilovet/hv/quantity"
+	"kilovet/insulation"
+	"kilovet/rules/evidence"
+	"kilovet/rules/limits"
+	"kilovet/rules/rule"
+)
+
+// unanswered judges a gap whose breakdown no law gives at its distance by its bounds: it
+// holds under the lower, fails above the upper and is unassessed between.
+func unanswered(f rule.Finding, x evidence.Spacing, computed bool) rule.Finding {
+	why := x.Assessment.Breakdown.Lack
+	if computed { // the line of a computed field has no other distance
+		return f.Lacking(why)
+	}
+	b, v := x.BreakdownBounds(), x.Voltages.Peak
+	stands := func(at quantity.Voltage, how, because string, comfort float64) rule.Finding {
+		f.Under = x.Under.Text()
+		f.Because = fmt.Sprintf("%s across a gap that stands at %s %s (%s)", quantity.Text(v), how, quantity.Text(at), because)
+		return f.ShareOf(rule.Of(at)).Most(rule.Of(v), rule.Of(at*limits.BreakdownShare), comfort)
+	}
+	switch {
+	case b.Least.Lack == nil && quantity.AtMost(v, b.Least.Value*limits.BreakdownShare):
+		f.Sources = append(rule.Cited(b.Least.Sources), breakdownSource)
+		f = stands(b.Least.Value, "least", b.Least.Because, limits.BreakdownShare/limits.BreakdownComfort-1).Assume(b.Least.Assumptions...)
+		if f.Verdict != rule.Meets {
+			f.Remedy = alternatives("lower the voltage", confirm)
+		}
+		return f
+	case b.Most.Lack == nil && !quantity.AtMost(v, b.Most.Value*limits.BreakdownShare):
+		f.Sources = append(rule.Cited(b.Most.Sources), breakdownSource)
+		f = stands(b.Most.Value, "most", b.Most.Because, 0)
+		f.Remedy = "widen the gap or take a stronger medium, or lower the voltage"
+		return f
+	}
+	f.Because = within(v, b)
+	return f.Lacking(why)
+}
+
+// within says what the bounds leave open.
+func within(v quantity.Voltage, b insulation.StrengthBounds) string {
+	text := ""
+	if b.Least.Lack == nil {
+		text = fmt.Sprintf("at least %s (%s)", quantity.Text(b.Least.Value), b.Least.Because)
+	}
+	if b.Most.Lack == nil {
+		if text != "" {
+			text += " and "
+		}
+		text += fmt.Sprintf("at most %s (%s), an upper limit and no pass", quantity.Text(b.Most.Value), b.Most.Because)
+	}
+	if text == "" {
+		return ""
+	}
+	return quantity.Text(v) + " across a gap that stands " + text
+}

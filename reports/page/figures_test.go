@@ -241,3 +241,24 @@ func TestSheetsHoldEveryFigureOfTheExample(t *testing.T) {
 		}
 	}
 }
+
+// A finding about the whole chain leads to the figures, tables and curves that its rule
+// rests on, where there are any.
+func TestAFindingAboutTheChainLeadsToWhatItRestsOn(t *testing.T) {
+	r := sample.Sound()
+	r.Findings = append(r.Findings, rule.Finding{Rule: "discharge.waiting_time", Subject: "chain", Verdict: rule.Meets, Concern: rule.Life, Because: "it waits"},
+		rule.Finding{Rule: "beam.blur", Subject: "beam", Verdict: rule.Fails, Concern: rule.Performance, Because: "too wide"},
+		rule.Finding{Rule: "access.interlock", Subject: "chain", Verdict: rule.Meets, Concern: rule.Life, Because: "two switches"})
+	r.Figures = append(of("stored.discharge_time", "lost", "s", []string{"", "stage.1"}, 7, 6), of("beam.blur_total", "", "m", []string{""}, 5e-9)...)
+	r.Tables = []exhibit.Table{{ID: "energy.nodes", Chapter: exhibit.Energy, Title: "Nodes", Columns: []exhibit.Column{{Head: "node"}}, Rows: [][]exhibit.Cell{{exhibit.Words("stage.1")}}}}
+	text := outline(page.New(r))
+	for _, want := range []string{
+		"see Table 1, stored.discharge_time links [{1 table energy.nodes } {stored.discharge_time figures stored.discharge_time whole chain}]",
+		"see beam.blur_total links [{beam.blur_total figure beam.blur_total }]",
+		"[0 two switches] [2 concerns life]\n",
+	} {
+		if !strings.Contains(text, want) {
+			t.Errorf("%q is missing in\n%s", want, text)
+		}
+	}
+}

@@ -76,14 +76,16 @@ func (n *writer) metRow(c digest.Chapter, f rule.Finding, l *legend, about []Lin
 }
 
 // joined puts two lines on one.
-func joined(a, b Line) Line {
+func joined(a, b Line) Line { return joinedBy("; ", a, b) }
+
+func joinedBy(between string, a, b Line) Line {
 	switch {
 	case a.Text == "":
 		return b
 	case b.Text == "":
 		return a
 	}
-	return Line{Text: a.Text + "; " + b.Text, Weight: a.Weight, Links: append(slices.Clone(a.Links), b.Links...)}
+	return Line{Text: a.Text + between + b.Text, Weight: a.Weight, Links: append(slices.Clone(a.Links), b.Links...)}
 }
 
 // limit is what a finding asks for, with the side that meets.

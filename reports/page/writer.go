@@ -128,17 +128,54 @@ func (n *writer) sourceLine(f rule.Finding) Line {
 	return l
 }
 
-// mostSeen is how many figures a finding refers to beside pictures and tables.
+// mostSeen is how many figures a finding refers to beside pictures and tables, where its
+// rule does not say what its findings rest on.
 const mostSeen = 2
 
-// seenLine refers to what is shown and computed of the subject of a finding.
+// seenLine refers to what a finding rests on.
 func (n *writer) seenLine(c digest.Chapter, f rule.Finding) Line {
-	var links []Link
-	var words []string
+	l := small("")
 	see := func(word, to string) {
-		words = append(words, word)
-		links = append(links, Link{word[strings.LastIndex(word, " ")+1:], to})
+		if to != "" && !slices.ContainsFunc(l.Links, func(k Link) bool { return k.To == to }) {
+			l = joinedBy(", ", l, Line{Text: word, Links: []Link{{word[strings.LastIndex(word, " ")+1:], to}}})
+		}
 	}
+	for _, ref := range digest.Rests(f.Rule, f.Subject) {
+		see(n.rest(ref))
+	}
+	if l.Text == "" {
+		n.seen(c, f, see)
+	}
+	if l.Text != "" {
+		l.Text, l.Weight = "see "+l.Text, Small
+	}
+	return l
+}
+
+// rest is what a rule rests on, and where it stands; nowhere where there is none.
+func (n *writer) rest(ref digest.Ref) (word, to string) {
+	if ref.Kind == "figure" {
+		return ref.ID, n.places[place{ref.ID, ref.Subject}]
+	}
+	for _, c := range n.parts {
+		for _, curve := range c.Curves {
+			if ref.Kind == "curve" && curve.ID == ref.ID {
+				to = anchor("curve", curve.ID, curve.Subject)
+				return n.labels[to], to
+			}
+		}
+		for _, t := range c.Tables {
+			if ref.Kind == "table" && t.ID == ref.ID {
+				to = anchor("table", t.ID, t.Subject)
+				return n.labels[to], to
+			}
+		}
+	}
+	return "", ""
+}
+
+// seen refers to what is shown and computed of the subject of a finding.
+func (n *writer) seen(c digest.Chapter, f rule.Finding, see func(word, to string)) {
 	for _, curve := range c.Curves {
 		if to := anchor("curve", curve.ID, curve.Subject); speaksOf(curve.Subject, f.Subject) {
 			see(n.labels[to], to)
@@ -149,17 +186,9 @@ func (n *writer) seenLine(c digest.Chapter, f rule.Finding) Line {
 			see(n.labels[to], to)
 		}
 	}
-	var seen []string
 	for _, fig := range nearest(c.Figures, f) {
-		if to := n.places[place{fig.ID, fig.Subject}]; to != "" && !slices.Contains(seen, to) {
-			see(fig.ID, to)
-			seen = append(seen, to)
-		}
+		see(fig.ID, n.places[place{fig.ID, fig.Subject}])
 	}
-	if len(words) == 0 {
-		return small("")
-	}
-	return Line{Text: "see " + strings.Join(words, ", "), Weight: Small, Links: links}
 }
 
 // nearest are the figures about the subject of a finding, one of each id; those first
@@ -184,5 +213,6 @@ func nearest(figures []figure.Figure, f rule.Finding) []figure.Figure {
 // speaksOf reports whether a figure of one subject tells of another: of the same part,
 // or of one of those it stands for.
 func speaksOf(of, subject string) bool {
-	return subject != "" && (of == subject || strings.HasPrefix(of, subject+"."))
+	rest, begins := strings.CutPrefix(of, subject)
+	return subject != "" && begins && (rest == "" || rest[0] == '.')
 }

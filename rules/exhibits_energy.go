@@ -67,28 +67,6 @@ func table(t exhibit.Table) []exhibit.Table {
 	return []exhibit.Table{t}
 }
 
-// openedTable shows what stays with one part open, and what the meter says then.
-func openedTable(e *evidence.Evidence) []exhibit.Table {
-	t := exhibit.Table{
-		ID: "energy.one_open", Chapter: exhibit.Energy, Title: "Discharge with one part open", Basis: "decay of the whole network, each part open in turn",
-		Columns: []exhibit.Column{{Head: "open"}, {Head: "last node"}, {Head: "to 60 V", Unit: "s"}, {Head: "the meter then shows", Unit: "V"}},
-		Note:    under(e) + "Of a resistor with several strings one is open. A meter that shows nothing does not prove that nothing is there.",
-	}
-	all, err := e.OneOpen()
-	if err != nil {
-		return nil
-	}
-	for _, o := range all {
-		meter := exhibit.Words("")
-		if o.Worst.Never && e.Chain().Divider != nil {
-			v, err := e.MeterAfter(o.Part)
-			meter = exhibit.OrWords(v, err)
-		}
-		t.Rows = append(t.Rows, []exhibit.Cell{exhibit.Words(o.Part), exhibit.Words(o.Worst.Node), lasting(o.Worst, nil), meter})
-	}
-	return table(t)
-}
-
 // comebackTable shows what dielectric absorption brings back.
 func comebackTable(e *evidence.Evidence) []exhibit.Table {
 	t := exhibit.Table{
@@ -208,14 +186,18 @@ func bodyTable(e *evidence.Evidence) []exhibit.Table {
 	}
 	t := exhibit.Table{
 		ID: "energy.body", Subject: node, Chapter: exhibit.Energy, Title: "What a body would take at " + node, Basis: "discharge of a capacitance through a resistance",
-		Columns: []exhibit.Column{{Head: "body"}, {Head: "resistance", Unit: "Ω"}, {Head: "peak current", Unit: "A"}, {Head: "lasting", Unit: "s"}, {Head: "charge", Unit: "C"}, {Head: "energy", Unit: "J"}, {Head: "source"}},
-		Note:    under(e) + "Information, never a permission: no current through a body is permitted by it. Lasting is the duration 3 R C that counts.",
+		Columns: []exhibit.Column{{Head: "body"}, {Head: "resistance", Unit: "Ω"}, {Head: "peak current", Unit: "A"}, {Head: "lasting", Unit: "s"}, {Head: "charge", Unit: "C"}, {Head: "energy", Unit: "J"}, {Head: "zone"}, {Head: "source"}},
+		Note:    under(e) + "Information, never a permission: no current through a body is permitted by it. Lasting is the duration 3 R C that counts. Zones: "+touch.ZoneSource+".",
 	}
 	for _, b := range touch.Bodies() {
 		if s, err := e.Shock(node, b); err == nil {
 			t.Rows = append(t.Rows, []exhibit.Cell{exhibit.Words(b.Name), exhibit.Number(b.Resistance), exhibit.Number(s.Peak), exhibit.Number(s.Duration),
-				exhibit.Number(s.Charge), exhibit.Number(s.Energy), exhibit.Words(b.Source + " (" + b.Mark + ")")})
+				exhibit.Number(s.Charge), exhibit.Number(s.Energy), exhibit.Words("an impulse: curves not seen"), exhibit.Words(b.Source + " (" + b.Mark + ")")})
 		}
+	}
+	if i, err := e.TouchCurrent(node); err == nil {
+		t.Rows = append(t.Rows, []exhibit.Cell{exhibit.Words("with the drive on"), exhibit.Number(quantity.Resistance(2e3)), exhibit.Number(i), exhibit.Words("as long as touched"),
+			exhibit.Words("–"), exhibit.Words("–"), exhibit.Words(touch.ZoneOfDC(i)), exhibit.Words("the steady state with 2 kΩ at the node")})
 	}
 	return table(t)
 }

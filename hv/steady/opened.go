@@ -13,6 +13,7 @@ type Opened struct {
 	Element  string
 	Slowest  Ending // of all nodes
 	MostLeft Ending // of all capacitors
+	Decay    *Decay
 }
 
 // DischargeWithOneOpen follows the decay anew with each diode and each permanent
@@ -34,7 +35,7 @@ func DischargeWithOneOpen(c *circuit.Circuit, from Voltages, limit quantity.Volt
 	all, errs := make([]Opened, len(names)), make([]error, len(names))
 	spread(len(names), func(i int) {
 		if intact.idle[names[i]] {
-			all[i] = Opened{names[i], intact.Slowest(), intact.MostLeft()}
+			all[i] = Opened{names[i], intact.Slowest(), intact.MostLeft(), intact}
 			return
 		}
 		all[i], errs[i] = dischargeOpen(c, names[i], from, limit)
@@ -62,7 +63,7 @@ func dischargeOpen(c *circuit.Circuit, name string, from Voltages, limit quantit
 		}
 		slowest = d.Slowest()
 	}
-	return Opened{name, slowest, d.MostLeft()}, nil
+	return Opened{name, slowest, d.MostLeft(), d}, nil
 }
 
 // spread does independent pieces of work on all processors; their results are placed

@@ -171,4 +171,7 @@ func TestLeadAtHeavyFiltration(t *testing.T) {
 // 0.5 mR/h are 4.38 µGy/h (Canadian regulation, text pair, read).
 func TestRoentgen(t *testing.T) {
 	near(t, "0.5 mR", 0.5e-3*xray.KermaPerRoentgen, 4.38e-6, 1e-3)
+	// 36 pA/kg are printed for 0.5 mR/h (specification of a cathode-ray tube, read): exactly
+	// 2.58e-4 C/kg a roentgen, over an hour.
+	near(t, "0.5 mR/h as a current", 0.5e-3*xray.KermaPerRoentgen/33.97/3600, 36e-12, 5e-3)
 }

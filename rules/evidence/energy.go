@@ -221,6 +221,7 @@ func (e *Evidence) SlowestDischarge() (Discharge, error) {
 type Opened struct {
 	Part  string
 	Worst Discharge
+	decay *steady.Decay
 }
 
 // OneOpen is the discharge with each diode and each permanent resistor open in turn.
@@ -237,7 +238,7 @@ func (e *Evidence) OneOpen() ([]Opened, error) {
 		all, err := steady.DischargeWithOneOpen(c, v, discharged)
 		var opened []Opened
 		for _, o := range all {
-			opened = append(opened, Opened{o.Element, discharge(o.Slowest)})
+			opened = append(opened, Opened{o.Element, discharge(o.Slowest), o.Decay})
 		}
 		return opened, err
 	})

@@ -80,33 +80,6 @@ func (e *Evidence) Unplugged(node string) (Discharge, error) {
 	return discharge(x), err
 }
 
-// MeterAfter is what the meter shows in the end, as the voltage of the sensed node, with a
-// part open after switching off.
-func (e *Evidence) MeterAfter(part string) (quantity.Voltage, error) {
-	c, err := e.Circuit()
-	if err != nil {
-		return 0, err
-	}
-	v, err := e.means()
-	if err != nil {
-		return 0, err
-	}
-	d, err := steady.Discharge(c.OpenString(part), v, discharged)
-	if err != nil {
-		return 0, err
-	}
-	x, err := d.Node("divider.tap")
-	if err != nil {
-		return 0, err
-	}
-	div, err := e.Divider()
-	if err != nil {
-		return 0, err
-	}
-	ratio, err := div.Ratio()
-	return magnitude(x.Rest) * quantity.Voltage(ratio), err
-}
-
 // Comeback is what dielectric absorption brings back on a capacitor.
 type Comeback struct {
 	Part       string

@@ -14,6 +14,12 @@ import (
 // place.
 func columnWith(t *testing.T, swaps ...string) *rules.Review {
 	t.Helper()
+	return reviewed(t, []byte(columnText(t, swaps...)))
+}
+
+// columnText is the built-in column with swaps.
+func columnText(t *testing.T, swaps ...string) string {
+	t.Helper()
 	text := string(described(t, "column"))
 	for i := 0; i < len(swaps); i += 2 {
 		if strings.Count(text, swaps[i]) != 1 {
@@ -21,7 +27,7 @@ func columnWith(t *testing.T, swaps ...string) *rules.Review {
 		}
 		text = strings.Replace(text, swaps[i], swaps[i+1], 1)
 	}
-	return reviewed(t, []byte(text))
+	return text
 }
 
 // number is a figure of the working state or of none; NaN where it is not listed.

@@ -187,7 +187,7 @@ func bodyTable(e *evidence.Evidence) []exhibit.Table {
 	t := exhibit.Table{
 		ID: "energy.body", Subject: node, Chapter: exhibit.Energy, Title: "What a body would take at " + node, Basis: "discharge of a capacitance through a resistance",
 		Columns: []exhibit.Column{{Head: "body"}, {Head: "resistance", Unit: "Ω"}, {Head: "peak current", Unit: "A"}, {Head: "lasting", Unit: "s"}, {Head: "charge", Unit: "C"}, {Head: "energy", Unit: "J"}, {Head: "zone"}, {Head: "source"}},
-		Note:    under(e) + "Information, never a permission: no current through a body is permitted by it. Lasting is the duration 3 R C that counts. Zones: "+touch.ZoneSource+".",
+		Note:    under(e) + "Information, never a permission: no current through a body is permitted by it. Lasting is the duration 3 R C that counts. Zones: " + touch.ZoneSource + ".",
 	}
 	for _, b := range touch.Bodies() {
 		if s, err := e.Shock(node, b); err == nil {

@@ -34,6 +34,7 @@ type VoltageTrip struct {
 type CurrentTrip struct {
 	document.Table
 	Trip   document.Given[quantity.Current] `key:"trip" range:"> 0 A, <= 1 kA" needed:"yes" means:"trip point" example:"200 uA"`
+	Senses document.Given[string]           `key:"senses" means:"whose current it reads: return, that of the multiplier (default, an assumption), or a part of the circuit by its name" example:"return"`
 	ActsOn document.Given[string]           `key:"acts_on" means:"what it switches off" example:"drive supply"`
 }
 

@@ -14,6 +14,7 @@ type Measure struct {
 	Name    string // "over-voltage trip"
 	Catches bool
 	Because string // one clause
+	Assumes []string
 }
 
 // sensor is what a trip looks at.
@@ -60,7 +61,7 @@ func measures(e *evidence.Evidence, f Fault) []Measure {
 		}
 	}
 	if f.Class == "pressure rise" && c.Vacuum != nil && c.Vacuum.PressurePermit.Set() {
-		all = append(all, Measure{"pressure interlock", true, "the high voltage is permitted below " + quantity.Text(c.Vacuum.PressurePermit.V) + " only"})
+		all = append(all, Measure{Name: "pressure interlock", Catches: true, Because: "the high voltage is permitted below " + quantity.Text(c.Vacuum.PressurePermit.V) + " only"})
 	}
 	return all
 }
@@ -83,12 +84,17 @@ func overVoltage(e *evidence.Evidence, f Fault, t *chain.VoltageTrip) Measure {
 }
 
 func overCurrent(e *evidence.Evidence, f Fault, t *chain.CurrentTrip) Measure {
-	m := Measure{Name: "over-current trip"}
-	if f.Part == "multiplier return" {
+	m := Measure{Name: "over-current trip", Assumes: e.TripAssumptions()}
+	senses := e.TripSenses()
+	switch {
+	case f.Part == "multiplier return" && senses == evidence.OfReturn:
 		m.Because = "it rests on the return that failed"
 		return m
+	case f.Part == senses:
+		m.Because = "it rests on " + senses + ", which failed"
+		return m
 	}
-	return trips(e, m, t.ActsOn.V, t.Trip.V, (*evidence.Evidence).SupplyCurrent)
+	return trips(e, m, t.ActsOn.V, t.Trip.V, (*evidence.Evidence).TripCurrent)
 }
 
 // trips decides whether what a trip sees is at or above its set point, and whether it acts.

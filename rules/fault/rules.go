@@ -79,12 +79,12 @@ func taken(all []Outcome) []string {
 var ratings = rule.Rule{
 	ID: "fault.rating", Title: "Ratings in a single fault",
 	Demands: "No single fault and no error of assembly takes another part above its rating, unless an independent measure of [protection] switches off.",
-	Applies: "Every class of faults of the library. One broken part may cost another, hurting nobody: it is marginal and never fails.",
-	Margin:  "marginal above the whole rating",
+	Applies: "Every class of faults of the library. One broken part may cost another, hurting nobody: that is marginal and does not fail. Cable and heater feed keep the voltage from hands and mains: passing their rating fails.",
+	Margin:  "marginal above the whole rating; for cable and heater feed failing there",
 	Concern: rule.Equipment,
-	Sources: []rule.Source{limits.FaultSource, faultSource},
+	Sources: []rule.Source{limits.FaultSource, faultSource, gradeSource},
 	Example: rule.Example{
-		Swaps: []rule.Swap{{Was: `over_current = { trip = "200 uA", acts_on = "drive supply" }`, Becomes: ""}},
+		Swaps: []rule.Swap{{Was: `over_current = { trip = "200 uA", senses = "return", acts_on = "drive supply" }`, Becomes: ""}},
 		Changes: []rule.Change{
 			{Rule: "fault.rating", Subject: "arc", Verdict: rule.Marginal},
 			{Rule: "fault.rating", Subject: "cable shorted", Verdict: rule.Marginal},
@@ -163,9 +163,10 @@ func judgeClass(e *evidence.Evidence, c class) (rule.Finding, bool) {
 		if !caught {
 			uncaught++
 		}
+		most := gravest(over)
 		_, before := by.Caught()
-		if worst == nil || !caught && before || caught == before && Share(over[0]) > Share(*worst) {
-			worst, by = &over[0], o
+		if worst == nil || graver(most, caught, *worst, before) {
+			worst, by = &most, o
 		}
 	}
 	if worst == nil {
@@ -177,9 +178,12 @@ func judgeClass(e *evidence.Evidence, c class) (rule.Finding, bool) {
 	if m, caught := by.Caught(); caught {
 		f.Relation, f.Needed, f.Provided, f.Margin = rule.Presence, nil, nil, nil
 		f.Because += fmt.Sprintf("; the %s catches it: %s", m.Name, m.Because)
-		return f.There(true), true
+		return f.There(true).Assume(m.Assumes...), true
 	}
 	f.Verdict = rule.Marginal
+	if keepsOff(*worst) {
+		f.Verdict, f.Concern = rule.Fails, worst.Concern
+	}
 	f.Because += fmt.Sprintf(", %d of them caught by nothing described (%s)", uncaught, whyNot(by.Measures))
 	f.Remedy = by.Add
 	if f.Remedy == "" {
@@ -200,17 +204,22 @@ func whyNot(all []Measure) string {
 	return strings.Join(words, "; ")
 }
 
-// summary says of all classes together what they do.
+// summary says of all classes together what they do; what fails is a finding of its own.
 func summary(e *evidence.Evidence, findings []rule.Finding) rule.Finding {
 	f := rule.Finding{Rule: "fault.rating", Subject: "chain", Concern: rule.Equipment, Relation: rule.Presence,
 		Place: e.Chain().Multiplier.Here(), Sources: []rule.Source{limits.FaultSource}}
-	counts := map[rule.Verdict]int{}
+	caught, met := 0, 0
 	for _, x := range findings {
-		counts[x.Verdict]++
+		if x.Relation == rule.Presence {
+			caught++
+		}
+		if x.Verdict == rule.Meets {
+			met++
+		}
 	}
 	f.Because = fmt.Sprintf("of %d classes of faults %d take another part above its rating; of these an independent trip catches %d",
-		len(classes(StudyAll(e))), len(findings), counts[rule.Meets])
-	if counts[rule.Marginal] == 0 {
+		len(classes(StudyAll(e))), len(findings), caught)
+	if met == len(findings) {
 		return f.There(true)
 	}
 	f.Verdict, f.Remedy = rule.Marginal, "read the table of faults, the worst first, and add what stands beside each"

@@ -13,12 +13,15 @@ import (
 	"kilovet/rules/rule"
 )
 
+var gapSource = rule.Source{Text: "decision of this review: a flashover to bonded metal or between parts is the arc of the library, which the bonds carry and whose stresses are judged there, and passing a tabulated clearance is no flashover; towards what a hand can reach nothing stands between", Mark: rule.Practice}
+
 var gaps = rule.Rule{
 	ID: "fault.spacing", Title: "Spacings in a single fault",
 	Demands: "What a single fault puts across a spacing neither breaks it down nor passes the clearance of the tables, unless an independent measure switches off.",
 	Applies: "Every spacing across which a fault puts more than any state does. Towards earthed metal and between parts it is marginal; it fails where the other side can be touched.",
+	Margin:  "marginal where it passes towards earthed metal or between parts, failing where a side can be touched or is the mains",
 	Concern: rule.Life,
-	Sources: []rule.Source{faultSource},
+	Sources: []rule.Source{faultSource, gapSource},
 	Example: rule.Example{
 		Swaps:   []rule.Swap{{Was: "name       = \"stages 1 to 3\"\nfrom       = \"stage.1\"\nto         = \"stage.2\"\nalso       = [\"stage.3\"]\nmedium     = \"air\"\ninsulation = \"functional\"\nclearance  = \"18 mm\"", Becomes: "name       = \"stages 1 to 3\"\nfrom       = \"stage.1\"\nto         = \"stage.2\"\nalso       = [\"stage.3\"]\nmedium     = \"air\"\ninsulation = \"functional\"\nclearance  = \"70 mm\""}},
 		Changes: []rule.Change{{Rule: "fault.spacing", Subject: "stages 1 to 3", Verdict: rule.Meets}},
@@ -60,7 +63,7 @@ func judgeGap(e *evidence.Evidence, s *chain.Spacing) (rule.Finding, bool) {
 	if m, caught := by.Caught(); caught {
 		f.Relation, f.Needed, f.Provided, f.Margin = rule.Presence, nil, nil, nil
 		f.Because += fmt.Sprintf("; the %s catches it: %s", m.Name, m.Because)
-		return f.WithoutRemedyIfMet(), true
+		return f.Assume(m.Assumes...).WithoutRemedyIfMet(), true
 	}
 	f.Verdict = rule.Marginal
 	if touches(e, s) {
@@ -188,7 +191,7 @@ func held(e *evidence.Evidence, node string, by Outcome, f rule.Finding) rule.Fi
 	bond, cable := e.Chain().Access.EarthBond, e.Chain().Cable
 	if m, caught := by.Caught(); caught {
 		f.Because += fmt.Sprintf("; the %s switches off: %s", m.Name, m.Because)
-		return present(f).Assume("the " + m.Name + " acts before anybody is hurt")
+		return present(f).Assume(append(m.Assumes, "the "+m.Name+" acts before anybody is hurt")...)
 	}
 	switch {
 	case node == circuit.Chassis && (bond == nil || !bond.Count.Set()):

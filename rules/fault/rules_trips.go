@@ -118,8 +118,8 @@ func borne[Q quantity.Number](e *evidence.Evidence, seen func(*evidence.Evidence
 var overCurrentTrip = rule.Rule{
 	ID: "protection.over_current", Title: "Over-current trip",
 	Demands: "The over-current trip takes the drive away, and is set above the highest working current and below what the diodes carry.",
-	Applies: "Where an over-current trip is described. It is taken to read the current that returns to the multiplier.",
-	Margin:  "marginal with less than 5 % above the working current",
+	Applies: "Where an over-current trip is described. It reads what senses says; without that the current that returns to the multiplier, which is an assumption.",
+	Margin:  "marginal with less than 5 % above the working current, or where what it senses is assumed",
 	Concern: rule.Equipment,
 	Sources: []rule.Source{limits.TripSource},
 	Example: rule.Example{
@@ -147,12 +147,13 @@ func judgeOverCurrent(e *evidence.Evidence, t *chain.CurrentTrip) rule.Finding {
 		f.Relation = rule.Presence
 		return f.There(false)
 	}
-	most, err := evidence.Largest(e, working(), []string{""}, func(e *evidence.Evidence, _ string) (quantity.Current, error) { return e.SupplyCurrent() })
+	most, err := evidence.Largest(e, working(), []string{""}, func(e *evidence.Evidence, _ string) (quantity.Current, error) { return e.TripCurrent() })
 	if err != nil {
 		return f.Lacking(err)
 	}
 	f.Under = most.Under.Text()
-	f.Because += fmt.Sprintf(", is set to %s, and the chain works with up to %s", quantity.Text(t.Trip.V), quantity.Text(most.Value))
+	f = f.Assume(e.TripAssumptions()...)
+	f.Because += fmt.Sprintf(", is set to %s, and %s works with up to %s", quantity.Text(t.Trip.V), sensed(e), quantity.Text(most.Value))
 	f.Remedy = "set it above the highest working current, and below what the diodes carry"
 	if d := e.Chain().Multiplier.Diode; d != nil && d.RatedCurrent.Set() {
 		bears := d.RatedCurrent.V * quantity.Current(limits.DiodeCurrent.Fails)
@@ -162,4 +163,12 @@ func judgeOverCurrent(e *evidence.Evidence, t *chain.CurrentTrip) rule.Finding {
 		}
 	}
 	return f.Least(rule.Of(t.Trip.V), rule.Of(most.Value), limits.TripMargin).WithoutRemedyIfMet()
+}
+
+// sensed names what the over-current trip reads.
+func sensed(e *evidence.Evidence) string {
+	if part := e.TripSenses(); part != evidence.OfReturn {
+		return part
+	}
+	return "the multiplier's return"
 }

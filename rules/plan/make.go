@@ -131,7 +131,7 @@ func (m *maker) trips() {
 		m.plan.Trips = append(m.plan.Trips, Trip{"over-voltage", quantity.Text(t.Trip.V), textOr(most.Value, err)})
 	}
 	if t := p.OverCurrent; t != nil {
-		i, err := m.e.In(evidence.Working).ReturnCurrent()
+		i, err := m.e.In(evidence.Working).TripCurrent()
 		m.plan.Trips = append(m.plan.Trips, Trip{"over-current", quantity.Text(t.Trip.V), textOr(i, err)})
 	}
 }

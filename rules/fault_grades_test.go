@@ -1,0 +1,59 @@
+package rules_test
+
+import (
+	"slices"
+	"strings"
+	"testing"
+
+	"kilovet/rules"
+	"kilovet/rules/rule"
+)
+
+// Insulation between the high voltage and people is no part like another: above its rating
+// in a fault that nothing catches it fails, and that is of concern for life. A resistor that
+// passes its rating in the same way is marginal.
+func TestInsulationInAFault(t *testing.T) {
+	r := wholeWith(t, `length        = "1.5 m"
+capacitance   = "105 pF/m"
+rated_voltage = "40 kV"`, `length        = "1.5 m"
+capacitance   = "105 pF/m"
+rated_voltage = "22.5 kV"`, `over_voltage = { trip = "23 kV", senses = "second divider", acts_on = "drive supply" }`, "")
+	i := slices.IndexFunc(r.Findings, func(f rule.Finding) bool { return f.Rule == "fault.rating" && f.Subject == "gun-end resistor open" })
+	if i < 0 || r.Findings[i].Verdict != rule.Fails || r.Findings[i].Concern != rule.Life || !strings.Contains(r.Findings[i].Because, "able") {
+		t.Errorf("the cable is not judged: %+v", r.Findings[max(i, 0)])
+	}
+	if v := verdictOf(r, "fault.rating", "divider element off by ten"); v != rule.Marginal {
+		t.Errorf("a resistor: %s", v)
+	}
+}
+
+// The over-current trip senses what it is said to: a part that a fault leaves alone catches
+// nothing, the part that failed neither, and what is no part leaves it unassessed.
+func TestWhatTheOverCurrentTripSenses(t *testing.T) {
+	const trip = `over_current = { trip = "200 uA", senses = "return", acts_on = "drive supply" }`
+	for senses, want := range map[string]rule.Verdict{"return": rule.Meets, "filter.1.resistor": rule.Meets, "bias.resistor": rule.Marginal} {
+		r := wholeWith(t, trip, strings.Replace(trip, "return", senses, 1))
+		if v := verdictOf(r, "fault.rating", "filter capacitor shorted"); v != want {
+			t.Errorf("sensing %s: %s, want %s", senses, v, want)
+		}
+	}
+	assumed := wholeWith(t, trip, strings.Replace(trip, `senses = "return", `, "", 1))
+	for _, subject := range []string{"arc", "filter capacitor shorted"} {
+		if v := verdictOf(assumed, "fault.rating", subject); v != rule.Marginal {
+			t.Errorf("%s rests on an assumption: %s", subject, v)
+		}
+	}
+	if v := verdictOf(assumed, "protection.over_current", "chain"); v != rule.Marginal {
+		t.Errorf("the trip rests on an assumption: %s", v)
+	}
+	strange := wholeWith(t, trip, strings.Replace(trip, "return", "the blue wire", 1))
+	if v := verdictOf(strange, "protection.over_current", "chain"); v != rule.Unassessed {
+		t.Errorf("what it senses is no part: %s", v)
+	}
+}
+
+// wholeWith is columnWith, single faults and all.
+func wholeWith(t *testing.T, swaps ...string) *rules.Review {
+	t.Helper()
+	return reviewedWhole(t, []byte(columnText(t, swaps...)))
+}

@@ -133,3 +133,9 @@ func (w Wire) SwingAt(f quantity.Frequency, current quantity.Current) (quantity.
 	long, err := w.Current()
 	return swing * quantity.TemperatureRise(math.Pow(max(1, float64(current/long)), 2)), err
 }
+
+// HotResistance is that of a filament at its working voltage and current, V/I (Ohm), several
+// times its cold one.
+func HotResistance(v quantity.Voltage, i quantity.Current) quantity.Resistance {
+	return quantity.Resistance(float64(v) / float64(i))
+}

@@ -130,3 +130,8 @@ func TestNoiseAcrossTheBias(t *testing.T) {
 	_, err = p.ResistorNoise(1e-9, 0)
 	lacking(t, "0 K", err, lack.Outside)
 }
+
+// 1.9 V and 2.4 A (derived).
+func TestHotResistance(t *testing.T) {
+	near(t, "V/I", float64(gun.HotResistance(1.9, 2.4)), 0.7916667, 1e-6)
+}

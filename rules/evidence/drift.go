@@ -1,10 +1,9 @@
 package evidence
 
 import (
-	"math"
-
 	"kilovet/hv/lack"
 	"kilovet/hv/quantity"
+	"kilovet/hv/steady"
 )
 
 // Drift is how far one cause moves the accelerating voltage within an exposure, peak to
@@ -61,7 +60,7 @@ func (e *Evidence) referenceDrift() (Drift, error) {
 		return Drift{}, nil
 	}
 	v, err := e.Accelerated()
-	return Drift{"reference/temperature", magnitude(v) * quantity.Voltage(math.Abs(float64(r.TemperatureCoefficient.V)*float64(e.change())))}, err
+	return Drift{"reference/temperature", magnitude(v) * quantity.Voltage(steady.Drift(r.TemperatureCoefficient.V, e.change()))}, err
 }
 
 func (e *Evidence) stability() (Drift, error) {
@@ -84,6 +83,5 @@ func (e *Evidence) biasDrift() (Drift, error) {
 	if err != nil {
 		return Drift{}, err
 	}
-	part := math.Abs(float64(b.Resistor.TemperatureCoefficient.V) * float64(e.change()))
-	return Drift{"bias resistor/temperature", p.DriftOfBias(quantity.Fraction(part))}, nil
+	return Drift{"bias resistor/temperature", p.DriftOfBias(steady.Drift(b.Resistor.TemperatureCoefficient.V, e.change()))}, nil
 }

@@ -1,8 +1,6 @@
 package evidence
 
 import (
-	"math"
-
 	"kilovet/hv/circuit"
 	"kilovet/hv/lack"
 	"kilovet/hv/quantity"
@@ -100,65 +98,20 @@ func (e *Evidence) settle(peak quantity.Voltage, from *network.Periodic) (failur
 // regulated is where the regulation comes to rest: where its divider reads what it read
 // before, or at the limit of the drive where that is not enough.
 func (e *Evidence) regulated() (failure, error) {
-	const good = 1e-4 // of the reading: far below what a divider is off
 	wanted, peak, err := e.wanted()
 	if err != nil {
 		return failure{}, err
 	}
-	at, err := e.settle(peak, e.alike())
-	if err != nil {
-		return failure{}, err
-	}
-	low, high := failure{}, failure{} // the nearest that read too little and too much
-	var under, over quantity.Voltage
-	for range mostTrials {
-		read := e.read(at)
-		if quantity.AtMost(math.Abs(float64(read/wanted-1)), good) {
-			return at, nil
-		}
-		if read < wanted {
-			if limit, err := e.limit(); err == nil && quantity.AtLeast(at.peak, limit) {
-				return at, nil
+	return network.Regulate(network.Regulation[failure]{
+		Wanted: wanted, First: peak, Limit: e.limit, Read: e.read,
+		At: func(peak quantity.Voltage, before *failure) (failure, error) {
+			from := e.alike()
+			if before != nil {
+				from = before.Periodic
 			}
-			low, under = at, read
-		} else {
-			high, over = at, read
-		}
-		if low.peak > 0 && high.peak > 0 && quantity.AtMost(float64(high.peak/low.peak-1), good) {
-			return low, nil // it reads too much with a little more: what strikes keeps it there
-		}
-		next, err := e.next(at, read, wanted, low.peak, under, high.peak, over)
-		if err != nil {
-			return failure{}, err
-		}
-		if at, err = e.settle(next, at.Periodic); err != nil {
-			return failure{}, err
-		}
-	}
-	return failure{}, lack.Failed("the regulation does not come to rest")
-}
-
-// mostTrials is how many drives are tried until the regulation is at rest.
-const mostTrials = 40
-
-// next is the drive to try next: in proportion at first, then between the nearest ones.
-func (e *Evidence) next(at failure, read, wanted, low, under, high, over quantity.Voltage) (quantity.Voltage, error) {
-	if low > 0 && high > 0 {
-		p := low + (wanted-under)*(high-low)/(over-under)
-		edge := (high - low) / 20
-		return min(max(p, low+edge), high-edge), nil
-	}
-	if read > wanted {
-		return at.peak * max(wanted/read, 0.1), nil
-	}
-	limit, err := e.limit()
-	if err != nil {
-		return 0, err
-	}
-	if read <= 0 || at.peak*wanted/read > limit {
-		return limit, nil
-	}
-	return min(limit, at.peak*(1+1.02*(wanted/read-1))), nil
+			return e.settle(peak, from)
+		},
+	})
 }
 
 // wanted is what the regulation wants to read at the tap, and the drive it begins with.

@@ -5,6 +5,7 @@ import (
 	"strings"
 
 	"kilovet/hv/circuit"
+	"kilovet/hv/gun"
 	"kilovet/hv/quantity"
 	"kilovet/rules/evidence"
 )
@@ -192,7 +193,7 @@ func (m *maker) heater() {
 		return
 	}
 	if h.Voltage.Set() && h.Current.Set() && h.Current.V > 0 {
-		hot := quantity.Resistance(float64(h.Voltage.V) / float64(h.Current.V))
+		hot := gun.HotResistance(h.Voltage.V, h.Current.V)
 		m.check(Check{What: "filament", Across: "heater.a to heater.b", With: "low-resistance ohmmeter, four leads",
 			Words: "not open, and well below the " + quantity.Text(hot) + " it has when hot"})
 	}

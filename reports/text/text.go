@@ -28,7 +28,7 @@ const screen = 23
 // How much of each list the first screen shows.
 const (
 	mostSummary  = 8
-	fewSummary   = 4 // where there is much to list
+	fewSummary   = 3 // where there is much to list
 	mostSubjects = 3
 	mostMissing  = 6
 	leastList    = 4 // lines of what was found, whatever the rest takes
@@ -108,32 +108,6 @@ func heading(w *writer, h rules.Heading) {
 	default:
 		w.short("", 0, title, 1)
 		w.short("", 0, marks, 1)
-	}
-}
-
-// list tells in so many lines what stands against switching on, gravest first, and
-// after it what is met with little in hand. Where there are lines for every entry,
-// those left over tell the reasons of the first; else each that is shown has its own.
-func list(w *writer, entries []digest.Entry, lines int) {
-	if len(entries) == 0 {
-		return
-	}
-	w.blank()
-	shown, spare := len(entries), lines-len(entries)
-	if spare < 0 {
-		shown = (lines - 1) / 2
-		spare = lines - 1 - shown
-	}
-	for i, e := range entries[:shown] {
-		w.verdict(string(e.First.Verdict), e.First.Verdict, w.fit(string(e.First.Concern)+": "+e.Text(mostSubjects), w.width-gutter))
-		if spare > 0 {
-			before := w.height()
-			w.short("", gutter, e.First.Because, min(2, max(1, spare-(shown-1-i))))
-			spare -= w.height() - before
-		}
-	}
-	if rest := len(entries) - shown; rest > 0 {
-		w.short("", gutter, more(rest), 1)
 	}
 }
 

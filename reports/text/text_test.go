@@ -171,7 +171,7 @@ func narrow(n int) *rules.Review {
 func TestLittleInHandIsOnTheFirstScreenAsFarAsItFits(t *testing.T) {
 	for _, n := range []int{1, 4, 6, 30} {
 		out := string(text.Render(narrow(n), text.Options{}))
-		shown := strings.Count(out, "marginal     equipment: rating.")
+		shown := strings.Count(out, "rating.")
 		rest := 0
 		if _, after, found := strings.Cut(out, "and "+fmt.Sprint(n-shown)+" rule"); found && after != "" {
 			rest = n - shown
@@ -179,5 +179,27 @@ func TestLittleInHandIsOnTheFirstScreenAsFarAsItFits(t *testing.T) {
 		if shown == 0 || shown+rest != n || strings.Count(out, "\n") > 23 || !strings.Contains(out, "Reason 0.") {
 			t.Errorf("%d rules, %d shown, %d counted, %d lines:\n%s", n, shown, rest, strings.Count(out, "\n"), out)
 		}
+	}
+}
+
+// Where there are too many for a line each, the gravest stands with its reason and the
+// rules of the others are named together, each with how often it was found.
+func TestACrowdIsNamed(t *testing.T) {
+	r := narrow(12)
+	for i := range 12 {
+		r.Findings = append(r.Findings, rule.Finding{Rule: fmt.Sprintf("touch.%d", i), Subject: "one", Verdict: rule.Fails, Concern: rule.Life, Because: fmt.Sprintf("Cause %d.", i)},
+			rule.Finding{Rule: fmt.Sprintf("touch.%d", i), Subject: "two", Verdict: rule.Fails, Concern: rule.Life})
+	}
+	r.Verdict, r.Counts = rule.Fails, map[rule.Verdict]int{rule.Fails: 24, rule.Marginal: 12, rule.Meets: 2}
+	out := string(text.Render(r, text.Options{}))
+	for i := range 12 {
+		for _, want := range []string{fmt.Sprintf("touch.%d", i), fmt.Sprintf("rating.%d", i)} {
+			if strings.Count(out, want+"(2)")+strings.Count(out, want+",")+strings.Count(out, want+"\n")+strings.Count(out, want+": one; two") != 1 {
+				t.Errorf("%s is not named once", want)
+			}
+		}
+	}
+	if !strings.Contains(out, "Cause 0.") || !strings.Contains(out, "marginal     equipment: rating.0, rating.1") || strings.Count(out, "\n") > 23 {
+		t.Error(out)
 	}
 }

@@ -29,15 +29,7 @@ func (r *reviewing) limits() (*localLimits, error) {
 	if r.local == "" || r.under != nil {
 		return r.under, nil
 	}
-	if r.local == "-" {
-		return nil, exitf(unusable, "local limits are not read from standard input; name a file")
-	}
-	file, err := os.Open(r.local)
-	if err != nil {
-		return nil, exitf(files, "%s cannot be read: %v", r.local, plain(err))
-	}
-	defer file.Close()
-	given, err := readAll(r.local, file)
+	given, err := limitsFile(r.local)
 	if err != nil {
 		return nil, err
 	}
@@ -47,6 +39,19 @@ func (r *reviewing) limits() (*localLimits, error) {
 	}
 	r.under = &localLimits{given.name, limits, inputOf("local limits", given)}
 	return r.under, nil
+}
+
+// limitsFile is what stands in a file of local limits.
+func limitsFile(path string) (source, error) {
+	if path == "-" {
+		return source{}, exitf(unusable, "local limits are not read from standard input; name a file")
+	}
+	file, err := os.Open(path)
+	if err != nil {
+		return source{}, exitf(files, "%s cannot be read: %v", path, plain(err))
+	}
+	defer file.Close()
+	return readAll(path, file)
 }
 
 // faulty lists the faults of a file, which end the run.

@@ -15,6 +15,7 @@ import (
 
 	"kilovet"
 	"kilovet/hv/chain"
+	"kilovet/hv/document"
 	"kilovet/reports/digest"
 	"kilovet/reports/text"
 	"kilovet/rules"
@@ -162,34 +163,43 @@ func (r *reviewing) review(given source) (*rules.Review, error) {
 	return r.reviewOf(c, given)
 }
 
-// reviewOf runs the rules on a description that was read without faults.
+// reviewOf runs the rules on a description that was read without faults; faults of the
+// local limits are listed and end the run.
 func (r *reviewing) reviewOf(c *chain.Chain, given source) (*rules.Review, error) {
+	review, faults, err := r.judged(c, given)
+	switch {
+	case err != nil:
+		return nil, err
+	case len(faults) > 0:
+		return nil, r.faulty(r.under.name, faults)
+	case r.under != nil:
+		r.refusals(r.under.name, review.Local)
+	}
+	return review, nil
+}
+
+// judged runs the rules; the faults are those of the local limits.
+func (r *reviewing) judged(c *chain.Chain, given source) (*rules.Review, document.Faults, error) {
 	inputs, program := []rules.Input{inputOf("description", given)}, rules.Program{Name: "kilovet", Version: version()}
 	progress := r.progress()
 	defer progress.end()
 	beside := rules.Beside{Without: r.without, Progress: progress.tell}
 	ripple, trace, err := r.ripple(c, given)
 	if err != nil {
-		return nil, err
+		return nil, nil, err
 	}
 	if ripple != nil {
 		beside.Ripple, inputs = trace, append(inputs, ripple.input())
 	}
 	limits, err := r.limits()
 	if err != nil {
-		return nil, err
+		return nil, nil, err
 	}
-	if limits == nil {
-		review, _ := rules.RunUnder(c, inputs, program, beside)
-		return review, nil
+	if limits != nil {
+		beside.Limits, inputs = limits.file, append(inputs, limits.input)
 	}
-	beside.Limits = limits.file
-	review, faults := rules.RunUnder(c, append(inputs, limits.input), program, beside)
-	if len(faults) > 0 {
-		return nil, r.faulty(limits.name, faults)
-	}
-	r.refusals(limits.name, review.Local)
-	return review, nil
+	review, faults := rules.RunUnder(c, inputs, program, beside)
+	return review, faults, nil
 }
 
 // understood reads the description; its faults are all listed and end the run.

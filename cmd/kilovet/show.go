@@ -27,8 +27,10 @@ import (
 // showing is a description that is shown while it is written.
 type showing struct {
 	world
-	path string
-	port int
+	path    string
+	local   string
+	without []string
+	port    int
 }
 
 func showCommand(w world) *cobra.Command {
@@ -37,10 +39,12 @@ func showCommand(w world) *cobra.Command {
 		Use:   "show CHAIN.toml",
 		Short: "Show a description's review in the browser, anew whenever it is saved",
 		Example: `  kilovet show chain.toml              says the address to open
-  kilovet show --port 8123 chain.toml  at a port of your own`,
+  kilovet show --port 8123 chain.toml  at a port of your own
+  kilovet show --local house.toml chain.toml
+                                       under a stricter local code`,
 		Long: `Serve the review of a description as a page to this computer alone. The page
-follows the file: it is made anew whenever the file is saved, and shows faults
-at their lines. It ends with Ctrl+C.`,
+follows the file, and that of --local: it is made anew whenever one is saved,
+and shows faults at their lines. It ends with Ctrl+C.`,
 		Args: cobra.ExactArgs(1),
 		RunE: func(c *cobra.Command, args []string) error {
 			s.path = args[0]
@@ -48,6 +52,8 @@ at their lines. It ends with Ctrl+C.`,
 		},
 		ValidArgsFunction: descriptions,
 	}
+	localFlag(command.Flags(), &s.local)
+	withoutFlag(command.Flags(), &s.without)
 	command.Flags().IntVar(&s.port, "port", 0, "`PORT` to listen on; 0 takes a free one")
 	return command
 }
@@ -59,7 +65,13 @@ func (s *showing) run(ctx context.Context) error {
 	if s.path == "-" {
 		return exitf(unusable, "what comes on standard input is not saved anew; give a file")
 	}
+	if err := leavable(s.without); err != nil {
+		return err
+	}
 	if _, err := s.read(); err != nil {
+		return err
+	}
+	if _, err := s.code(); err != nil {
 		return err
 	}
 	listener, err := net.Listen("tcp4", fmt.Sprintf("127.0.0.1:%d", s.port))
@@ -118,21 +130,25 @@ type follower struct {
 const patience = 2
 
 func (f *follower) look() error {
-	given, err := f.read()
-	if err != nil {
-		if f.missed++; f.missed < patience {
-			return nil
-		}
-		given = source{name: f.path, note: err.Error()}
-	} else {
+	given, away := f.read()
+	code, without := f.code()
+	if away == nil && without == nil {
 		f.missed = 0
+	} else if f.missed++; f.missed < patience {
+		return nil
 	}
-	sum := sha256.Sum256(slices.Concat(given.data, []byte(given.note), f.beside(given)))
+	if away != nil {
+		given = source{name: f.path, note: away.Error()}
+	}
+	if without != nil {
+		code = source{name: f.local, note: without.Error()}
+	}
+	sum := sha256.Sum256(slices.Concat(given.data, []byte(given.note), f.beside(given), []byte{0}, code.data, []byte(code.note)))
 	version := hex.EncodeToString(sum[:8])
 	if version == f.last {
 		return nil
 	}
-	page, err := f.page(given, version)
+	page, err := f.page(given, code, version)
 	if err != nil {
 		return defect(err)
 	}
@@ -141,25 +157,47 @@ func (f *follower) look() error {
 	return nil
 }
 
-// page is the review of a description, or its faults; a note says why there is none.
-func (s *showing) page(given source, version string) ([]byte, error) {
-	name, o := filepath.Base(given.name), html.Options{Version: version}
-	if given.note != "" {
-		return html.Faults(name, nil, document.Faults{{Line: 1, Column: 1, What: given.note}}, o)
+// page is the review of a description under a local code, or the faults of one of them;
+// a note says why there is none.
+func (s *showing) page(given, code source, version string) ([]byte, error) {
+	o := html.Options{Version: version}
+	for _, file := range []source{given, code} {
+		if file.note != "" {
+			return html.Faults(filepath.Base(file.name), nil, document.Faults{{Line: 1, Column: 1, What: file.note}}, o)
+		}
 	}
 	c, faults := rules.Read(given.data)
 	if len(faults) == 0 {
 		faults = recordFaults(c, given)
 	}
 	if len(faults) > 0 {
-		return html.Faults(name, given.data, faults, o)
+		return html.Faults(filepath.Base(given.name), given.data, faults, o)
 	}
-	review, err := (&reviewing{world: s.world}).review(given)
-	if err != nil {
+	r := &reviewing{world: s.world, local: s.local, without: s.without}
+	if s.local != "" {
+		limits, faults := rules.ReadLocal(code.data)
+		if len(faults) > 0 {
+			return html.Faults(filepath.Base(code.name), code.data, faults, o)
+		}
+		r.under = &localLimits{code.name, limits, inputOf("local limits", code)}
+	}
+	review, faults, err := r.judged(c, given)
+	switch {
+	case err != nil:
 		return nil, errors.New("a description without faults was refused")
+	case len(faults) > 0:
+		return html.Faults(filepath.Base(code.name), code.data, faults, o)
 	}
 	o.Diagram = review.Diagram
 	return html.RenderWith(review, o)
+}
+
+// code is the file of --local; empty where none is named.
+func (s *showing) code() (source, error) {
+	if s.local == "" {
+		return source{}, nil
+	}
+	return limitsFile(s.local)
 }
 
 // beside is what was read beside a description, so that a change of it is seen.

@@ -27,6 +27,12 @@ type shown struct {
 // start shows a description until the test ends.
 func start(t *testing.T, description string) *shown {
 	t.Helper()
+	return startUnder(t, description, "")
+}
+
+// startUnder shows a description under the local code in a file, if one is named.
+func startUnder(t *testing.T, description, local string) *shown {
+	t.Helper()
 	path := filepath.Join(t.TempDir(), "chain.toml")
 	write(t, path, description)
 	listener, err := net.Listen("tcp4", "127.0.0.1:0")
@@ -37,7 +43,9 @@ func start(t *testing.T, description string) *shown {
 	s := &shown{path: path, address: listener.Addr().String(), ticks: make(chan time.Time)}
 	ended := make(chan error, 1)
 	out := &bytes.Buffer{}
-	go func() { ended <- (&showing{world: world{out: out}, path: path}).serve(ctx, listener, s.ticks) }()
+	go func() {
+		ended <- (&showing{world: world{out: out}, path: path, local: local}).serve(ctx, listener, s.ticks)
+	}()
 	s.end = func() error { cancel(); return <-ended }
 	t.Cleanup(cancel)
 	return s
@@ -99,6 +107,38 @@ func TestShowFollowsTheFile(t *testing.T) {
 	}
 	if err := s.end(); err != nil {
 		t.Error(err)
+	}
+}
+
+// The page follows the local code too: what it asks governs, and its faults are shown at
+// their lines.
+func TestShowFollowsTheLocalCode(t *testing.T) {
+	code := filepath.Join(t.TempDir(), "house.toml")
+	const stricter = "title = \"House rules\"\n\n[[limit]]\nrule   = \"spacing.clearance\"\nvalue  = \"250 mm\"\nsource = \"House rules HV-7\"\n"
+	write(t, code, stricter)
+	s := startUnder(t, gap, code)
+	if page := s.page(t); !strings.Contains(page, "bring it to at least 250 mm") {
+		t.Errorf("the local code does not govern: %.200s", page)
+	}
+	for broken, want := range map[string]string{
+		strings.Replace(stricter, "value", "valeu", 1):                        "in house.toml",
+		strings.Replace(stricter, "spacing.clearance", "spacing.clarence", 1): "in house.toml",
+	} {
+		write(t, code, broken)
+		s.ticks <- time.Time{}
+		s.ticks <- time.Time{} // taken when the first look is done
+		if page := s.page(t); !strings.Contains(page, want) {
+			t.Errorf("no faults of the local code: %.400s", page)
+		}
+	}
+	if err := os.Remove(code); err != nil {
+		t.Fatal(err)
+	}
+	for range 3 {
+		s.ticks <- time.Time{}
+	}
+	if page := s.page(t); !strings.Contains(page, "cannot be read") {
+		t.Errorf("judged without the local code that was asked for: %.200s", page)
 	}
 }
 

@@ -33,7 +33,9 @@ type Dimension struct {
 	Name  string // "edge radius of the hole"
 	Key   string // "feedthrough.hole.edge_radius"
 	Value quantity.Length
-	With  func(quantity.Length) *Arrangement
+	// Near is where it is, r + iz in metres; nil where it is everywhere.
+	Near *complex128
+	With func(quantity.Length) *Arrangement
 }
 
 // pen draws outlines for the description at a place of it.

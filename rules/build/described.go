@@ -12,7 +12,8 @@ import (
 )
 
 // Described is an arrangement as it is described. Its dimensions are the size of the
-// whole drawing and the radii of edges rounded between two straight pieces.
+// whole drawing, the radii of edges rounded between two straight pieces, and what moving a
+// part of it along or across the axis changes.
 func Described(f *chain.Field) *Arrangement {
 	a := &Arrangement{Field: *f}
 	if size := sizeOf(f); size > 0 {
@@ -27,6 +28,7 @@ func Described(f *chain.Field) *Arrangement {
 			}
 		}
 	}
+	a.Dimensions = append(a.Dimensions, movedDimensions(f)...)
 	return a
 }
 
@@ -125,7 +127,7 @@ func rounding(f *chain.Field, i, k int, q complex128) Dimension {
 	radius := quantity.Length(cmplx.Abs(end - centre))
 	at := strokes[k].To.V
 	return Dimension{
-		Name: fmt.Sprintf("radius of %s at r %s, z %s", f.Electrodes[i].Name.V, quantity.Text(at[0]), quantity.Text(at[1])),
+		Name: fmt.Sprintf("edge radius of %s at r %s, z %s", f.Electrodes[i].Name.V, quantity.Text(at[0]), quantity.Text(at[1])),
 		Key:  "field.electrodes.profile", Value: radius,
 		With: func(v quantity.Length) *Arrangement { return reRounded(f, i, k, q, float64(v/radius)) },
 	}

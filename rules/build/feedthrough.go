@@ -2,8 +2,10 @@ package build
 
 import (
 	"fmt"
+	"math"
 
 	"kilovet/hv/chain"
+	"kilovet/hv/document"
 	"kilovet/hv/lack"
 	"kilovet/hv/quantity"
 )
@@ -25,10 +27,10 @@ const FromFeedthrough = "feedthrough"
 // far around.
 func Feedthrough(f *chain.Feedthrough) (all []*Arrangement) {
 	if s := f.AirSide; s != nil {
-		all = append(all, side(f, "air side", "air", s.Length.V))
+		all = append(all, side(f, "air side", "air", s.Length))
 	}
 	if s := f.VacuumSide; s != nil {
-		all = append(all, side(f, "vacuum side", "vacuum", s.Length.V))
+		all = append(all, side(f, "vacuum side", "vacuum", s.Length))
 	}
 	return all
 }
@@ -39,12 +41,12 @@ type throughSizes struct {
 	bore, outer                   quantity.Length // of the sleeve, 0: none
 }
 
-func side(f *chain.Feedthrough, which, medium string, length quantity.Length) *Arrangement {
-	d := throughSizes{pin: f.Pin.Radius.V, hole: f.Hole.Radius.V, edge: f.Hole.EdgeRadius.V, half: f.PlateThickness.V / 2, length: length}
+func side(f *chain.Feedthrough, which, medium string, length document.Given[quantity.Length]) *Arrangement {
+	d := throughSizes{pin: f.Pin.Radius.V, hole: f.Hole.Radius.V, edge: f.Hole.EdgeRadius.V, half: f.PlateThickness.V / 2, length: length.V}
 	if f.Sleeve != nil {
 		d.bore, d.outer = f.Inner().V, f.Outer().V
 	}
-	b := throughBuilder{f, f.Name.V + ", " + which, medium}
+	b := throughBuilder{f, f.Name.V + ", " + which, medium, which, length.Key}
 	a := b.arrangement(d)
 	if a.Err == nil {
 		a.Dimensions = b.dimensions(d)
@@ -55,7 +57,8 @@ func side(f *chain.Feedthrough, which, medium string, length quantity.Length) *A
 // throughBuilder draws sides of one feedthrough.
 type throughBuilder struct {
 	*chain.Feedthrough
-	name, medium string
+	name, medium    string
+	side, lengthKey string
 }
 
 func (b throughBuilder) arrangement(d throughSizes) *Arrangement {
@@ -83,8 +86,6 @@ func (b throughBuilder) check(d throughSizes) error {
 		return lack.Range("an edge of %s on both faces does not go into a plate of %s", quantity.Text(d.edge), quantity.Text(2*d.half))
 	case d.pin <= 0 || d.hole <= d.pin || d.half <= 0 || d.edge < 0 || d.length <= 0:
 		return lack.Range("a feedthrough needs a pin in a hole of a plate")
-	case d.outer > 0 && !b.HasOuterGap():
-		return lack.Range("a sleeve that fills its hole leaves a wedge of no width at the edge, whose field is judged by its gaps and surfaces instead")
 	case d.outer > 0 && !(d.bore >= d.pin && d.outer > d.bore && d.outer <= d.hole):
 		return lack.Range("the sleeve does not go between pin and hole")
 	}
@@ -124,6 +125,9 @@ func (b throughBuilder) insulate(a *Arrangement, d throughSizes) error {
 		return err
 	}
 	body := p.ring(Sleeve, eps, d.bore, d.outer, end)
+	if d.edge > 0 && quantity.AtLeast(d.outer, d.hole) {
+		body.Profile = p.outline(b.joined(a, d, end)...)
+	}
 	if rho > 0 {
 		body.Resistivity = given(p, rho)
 	}
@@ -142,6 +146,20 @@ func (b throughBuilder) insulate(a *Arrangement, d throughSizes) error {
 	return nil
 }
 
+// filledTo is how wide, as a part of the edge radius, the wedge between a rounded edge and
+// a sleeve that fills its hole is where the joint ends: narrower it is taken as filled.
+const filledTo = 0.01
+
+// joined is the outline of a sleeve that fills its hole: it follows the rounded edge a
+// little, since a wedge of no width has no field that could be judged.
+func (b throughBuilder) joined(a *Arrangement, d throughSizes, end quantity.Length) []mark {
+	turn := math.Acos(1 - filledTo)
+	out := d.hole + filledTo*d.edge
+	up := d.half - d.edge + d.edge*quantity.Length(math.Sin(turn))
+	a.Assumed = append(a.Assumed, fmt.Sprintf("%s: the joint of sleeve and hole is filled to where the wedge beside the edge is %s wide", b.name, quantity.Text(filledTo*d.edge)))
+	return []mark{at(d.bore, 0), at(d.hole, 0), at(d.hole, d.half-d.edge), arc(out, up, d.hole+d.edge, d.half-d.edge, "right"), at(d.hole, up), at(d.hole, end), at(d.bore, end), at(d.bore, 0)}
+}
+
 // ring is a body from the middle of the plate to a height.
 func (p pen) ring(name string, eps float64, inner, outer, end quantity.Length) chain.Dielectric {
 	return chain.Dielectric{Name: given(p, name), Permittivity: given(p, eps),
@@ -158,6 +176,12 @@ func (b throughBuilder) dimensions(d throughSizes) (all []Dimension) {
 		}})
 	}
 	add("pin radius", b.Pin.Radius.Key, func(d *throughSizes) *quantity.Length { return &d.pin })
+	all = append(all, Dimension{Name: "plate thickness", Key: b.PlateThickness.Key, Value: 2 * d.half, With: func(v quantity.Length) *Arrangement {
+		other := d
+		other.half = v / 2
+		return b.arrangement(other)
+	}})
+	add("length of the "+b.side, b.lengthKey, func(d *throughSizes) *quantity.Length { return &d.length })
 	add("hole radius", b.Hole.Radius.Key, func(d *throughSizes) *quantity.Length { return &d.hole })
 	if d.edge > 0 {
 		add("edge radius of the hole", b.Hole.EdgeRadius.Key, func(d *throughSizes) *quantity.Length { return &d.edge })

@@ -3,8 +3,11 @@ package evidence
 import (
 	"fmt"
 	"math"
+	"math/cmplx"
+	"sync"
 
 	"kilovet/hv/lack"
+	"kilovet/hv/profile"
 	"kilovet/hv/quantity"
 	"kilovet/insulation"
 	"kilovet/insulation/gap"
@@ -24,8 +27,9 @@ type Answer struct {
 const (
 	mostTries    = 4
 	resizedMost  = 4.0
-	littleStep   = 1.04
+	littleStep   = 1.02
 	leastPower   = 0.03
+	mostMoves    = 6    // dimensions of a described arrangement that are tried
 	justMet      = 0.97 // of what is allowed, from which a dimension serves
 	nothingAsked = "the rule is met"
 )
@@ -45,14 +49,38 @@ func (e *Evidence) Answers(f *build.Arrangement) ([]Answer, error) {
 		if err != nil {
 			return nil, err
 		}
-		var all []Answer
-		for _, d := range f.Dimensions {
-			if d.Value > 0 {
-				all = append(all, e.answer(f, d, weak, asked))
-			}
+		list := nearest(f.Dimensions, weak.At)
+		all := make([]Answer, len(list))
+		var solving sync.WaitGroup
+		for i, d := range list {
+			solving.Go(func() { all[i] = e.answer(f, d, weak, asked) })
 		}
+		solving.Wait()
 		return all, nil
 	})
+}
+
+// nearest leaves out the dimensions of a described arrangement that lie farthest from
+// the weakest point, and those of no length.
+func nearest(all []build.Dimension, at profile.Point) (list []build.Dimension) {
+	far := func(d build.Dimension) float64 {
+		if d.Near == nil {
+			return 0
+		}
+		return cmplx.Abs(*d.Near - complex(float64(at.R), float64(at.Z)))
+	}
+	for _, d := range all {
+		closer := 0
+		for _, other := range all {
+			if other.Near != nil && far(other) < far(d) {
+				closer++
+			}
+		}
+		if d.Value > 0 && (d.Near == nil || closer < mostMoves) {
+			list = append(list, d)
+		}
+	}
+	return list
 }
 
 // tried is an arrangement with another dimension.

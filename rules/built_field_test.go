@@ -152,9 +152,9 @@ func TestFieldPictures(t *testing.T) {
 	}
 }
 
-// brazed is a lead-through whose sleeve of alumina, 16 mm long beyond a plate of 8 mm,
+// brazed is a lead-through whose sleeve, 16 mm long beyond a plate of 8 mm,
 // fills its hole of 6 mm and leaves a tenth of a millimetre at the pin of 2 mm.
-func brazed(edge string) []byte {
+func brazed(edge, joint string) []byte {
 	return []byte(`format = 1
 title = "lead"
 [[feedthrough]]
@@ -164,28 +164,28 @@ plate_thickness = "8 mm"
 pin = { radius = "2 mm" }
 hole = { radius = "6 mm"` + edge + ` }
 vacuum_side = { length = "16 mm" }
-sleeve = { material = "alumina", permittivity = 9.4, inner_radius = "2.1 mm", inner_gap = "vacuum" }
+sleeve = { material = "alumina", permittivity = 9.4, inner_radius = "2.1 mm", inner_gap = "vacuum"` + joint + ` }
 `)
 }
 
 // A sleeve that fills its hole: with a square edge against independent finite elements;
-// with a rounded one the joint is filled a little, said so, and the edge is no longer
-// sharp.
+// with a rounded one it takes where the filling ends, and the more is filled the less
+// field the wedge has.
 func TestSleeveThatFillsItsHole(t *testing.T) {
-	square := reviewed(t, brazed(""))
+	square := reviewed(t, brazed("", ""))
 	for id, want := range map[string]float64{"field.peak lead, vacuum side/pin": 2.98648863e6, "field.edge lead, vacuum side/plate at r 6 mm, z 4 mm": 0.680956751e6, "field.exponent lead, vacuum side/plate": -0.46934592} {
 		id, subject, _ := strings.Cut(id, " ")
 		if got := fieldFigure(square, id, subject); !(math.Abs(got/want-1) < 2e-3) {
 			t.Errorf("%s of %s %g, want %g", id, subject, got, want)
 		}
 	}
-	round := reviewed(t, brazed(`, edge_radius = "2 mm"`))
-	if peak := fieldFigure(round, "field.peak", "lead, vacuum side/plate"); !(peak > 0.3e6 && peak < 4e6) {
-		t.Errorf("peak on the rounded plate %g", peak)
+	const round = `, edge_radius = "2 mm"`
+	if peak := fieldFigure(reviewed(t, brazed(round, "")), "field.peak", "lead, vacuum side/plate"); !math.IsNaN(peak) {
+		t.Errorf("%g V/m in a wedge of no width", peak)
 	}
-	for _, f := range round.Findings {
-		if f.Rule == "field.strength" && f.Subject == "lead, vacuum side/plate" && !strings.Contains(strings.Join(f.Assumptions, "\n"), "is filled to where the wedge") {
-			t.Errorf("the joint is not named: %v", f.Assumptions)
-		}
+	little := fieldFigure(reviewed(t, brazed(round, `, joint_width = "0.02 mm"`)), "field.peak", "lead, vacuum side/plate")
+	much := fieldFigure(reviewed(t, brazed(round, `, joint_width = "0.5 mm"`)), "field.peak", "lead, vacuum side/plate")
+	if !(much < 0.8*little && little < 4e6) {
+		t.Errorf("%g V/m with little filled, %g with much", little, much)
 	}
 }

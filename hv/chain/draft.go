@@ -31,7 +31,7 @@ var draftOther = []string{
 	"spacing.shape.radius", "spacing.shape.tip_radius", "spacing.shape.edge_radius", "spacing.shape.earthed", "spacing.shape.body_radius", "spacing.shape.wall_radius",
 	"vacuum.gauge_factor", "spacing.board", "spacing.finish", "spacing.conditioned", "spacing.stressed_area", "spacing.junction_angle", "spacing.shielded",
 	"spacing.strength", "spacing.tested_thickness", "spacing.oil_test",
-	"feedthrough.voltage",
+	"feedthrough.voltage", "feedthrough.sleeve.joint_width",
 	"feedthrough.air_side.shape.radius", "feedthrough.air_side.shape.tip_radius", "feedthrough.air_side.shape.edge_radius", "feedthrough.air_side.shape.earthed", "feedthrough.air_side.shape.body_radius", "feedthrough.air_side.shape.wall_radius",
 	"feedthrough.vacuum_side.shape.radius", "feedthrough.vacuum_side.shape.tip_radius", "feedthrough.vacuum_side.shape.edge_radius", "feedthrough.vacuum_side.shape.earthed", "feedthrough.vacuum_side.shape.body_radius", "feedthrough.vacuum_side.shape.wall_radius",
 	"part.resistance", "part.forward_drop", "part.capacitance", "part.leakage",

@@ -46,6 +46,7 @@ type Sleeve struct {
 	OuterRadius     document.Given[quantity.Length]      `key:"outer_radius" range:"> 0 mm, <= 1 m" means:"outer radius (default: that of the hole)" example:"12 mm"`
 	InnerGap        document.Given[string]               `key:"inner_gap" words:"air | vacuum" means:"what fills the annulus between pin and sleeve" example:"vacuum"`
 	OuterGap        document.Given[string]               `key:"outer_gap" words:"air | vacuum" means:"what fills the annulus between sleeve and hole" example:"air"`
+	JointWidth      document.Given[quantity.Length]      `key:"joint_width" range:"> 0 mm, <= 100 mm" means:"sleeve that fills a hole with rounded edges: how wide the wedge beside the edge is where braze or cement ends; its field is then worked out" example:"0.1 mm"`
 	Permittivity    document.Given[float64]              `key:"permittivity" range:">= 1, <= 100" means:"relative permittivity (default: that of the material)" example:"9.2"`
 	Resistivity     document.Given[quantity.Resistivity] `key:"resistivity" range:"> 0 ohm m, <= 1e25 ohm m" means:"resistivity (default: that of the material)" example:"1e12 ohm m"`
 	Strength        document.Given[quantity.Field]       `key:"strength" range:"> 0 kV/mm, <= 1000 kV/mm" means:"short-time strength of the maker, at tested_thickness" example:"15 kV/mm"`

@@ -39,12 +39,13 @@ func Feedthrough(f *chain.Feedthrough) (all []*Arrangement) {
 type throughSizes struct {
 	pin, hole, edge, half, length quantity.Length
 	bore, outer                   quantity.Length // of the sleeve, 0: none
+	joint                         quantity.Length // how wide the wedge is where the filling ends
 }
 
 func side(f *chain.Feedthrough, which, medium string, length document.Given[quantity.Length]) *Arrangement {
 	d := throughSizes{pin: f.Pin.Radius.V, hole: f.Hole.Radius.V, edge: f.Hole.EdgeRadius.V, half: f.PlateThickness.V / 2, length: length.V}
 	if f.Sleeve != nil {
-		d.bore, d.outer = f.Inner().V, f.Outer().V
+		d.bore, d.outer, d.joint = f.Inner().V, f.Outer().V, f.Sleeve.JointWidth.V
 	}
 	b := throughBuilder{f, f.Name.V + ", " + which, medium, which, length.Key}
 	a := b.arrangement(d)
@@ -74,7 +75,7 @@ func (b throughBuilder) arrangement(d throughSizes) *Arrangement {
 	if d.outer > 0 {
 		a.Err = b.insulate(a, d)
 	}
-	a.Assumed = []string{fmt.Sprintf("%s: the pin goes on beyond the sleeve, an earthed wall stands at %s, ribs are left out", b.name, quantity.Text(wall))}
+	a.Assumed = append(a.Assumed, fmt.Sprintf("%s: the pin goes on beyond the sleeve, an earthed wall stands at %s, ribs are left out", b.name, quantity.Text(wall)))
 	return a
 }
 
@@ -86,6 +87,10 @@ func (b throughBuilder) check(d throughSizes) error {
 		return lack.Range("an edge of %s on both faces does not go into a plate of %s", quantity.Text(d.edge), quantity.Text(2*d.half))
 	case d.pin <= 0 || d.hole <= d.pin || d.half <= 0 || d.edge < 0 || d.length <= 0:
 		return lack.Range("a feedthrough needs a pin in a hole of a plate")
+	case d.fills() && !b.Sleeve.JointWidth.Set():
+		return lack.Because("a sleeve that fills its hole leaves a wedge of no width at the rounded edge: where its filling ends is not given", b.Sleeve.JointWidth.Key)
+	case d.fills() && d.joint >= d.edge:
+		return lack.Range("a joint filled to a width of %s is wider than the edge of %s", quantity.Text(d.joint), quantity.Text(d.edge))
 	case d.outer > 0 && !(d.bore >= d.pin && d.outer > d.bore && d.outer <= d.hole):
 		return lack.Range("the sleeve does not go between pin and hole")
 	}
@@ -125,8 +130,8 @@ func (b throughBuilder) insulate(a *Arrangement, d throughSizes) error {
 		return err
 	}
 	body := p.ring(Sleeve, eps, d.bore, d.outer, end)
-	if d.edge > 0 && quantity.AtLeast(d.outer, d.hole) {
-		body.Profile = p.outline(b.joined(a, d, end)...)
+	if d.fills() {
+		body.Profile = p.outline(d.joined(end)...)
 	}
 	if rho > 0 {
 		body.Resistivity = given(p, rho)
@@ -146,18 +151,17 @@ func (b throughBuilder) insulate(a *Arrangement, d throughSizes) error {
 	return nil
 }
 
-// filledTo is how wide, as a part of the edge radius, the wedge between a rounded edge and
-// a sleeve that fills its hole is where the joint ends: narrower it is taken as filled.
-const filledTo = 0.01
-
-// joined is the outline of a sleeve that fills its hole: it follows the rounded edge a
-// little, since a wedge of no width has no field that could be judged.
-func (b throughBuilder) joined(a *Arrangement, d throughSizes, end quantity.Length) []mark {
-	turn := math.Acos(1 - filledTo)
-	out := d.hole + filledTo*d.edge
+// joined is the outline of a sleeve that fills its hole: its filling follows the rounded
+// edge to where the wedge beside it is as wide as described.
+func (d throughSizes) joined(end quantity.Length) []mark {
+	turn := math.Acos(1 - float64(d.joint/d.edge))
 	up := d.half - d.edge + d.edge*quantity.Length(math.Sin(turn))
-	a.Assumed = append(a.Assumed, fmt.Sprintf("%s: the joint of sleeve and hole is filled to where the wedge beside the edge is %s wide", b.name, quantity.Text(filledTo*d.edge)))
-	return []mark{at(d.bore, 0), at(d.hole, 0), at(d.hole, d.half-d.edge), arc(out, up, d.hole+d.edge, d.half-d.edge, "right"), at(d.hole, up), at(d.hole, end), at(d.bore, end), at(d.bore, 0)}
+	return []mark{at(d.bore, 0), at(d.hole, 0), at(d.hole, d.half-d.edge), arc(d.hole+d.joint, up, d.hole+d.edge, d.half-d.edge, "right"), at(d.hole, up), at(d.hole, end), at(d.bore, end), at(d.bore, 0)}
+}
+
+// fills reports whether the sleeve fills a hole with rounded edges.
+func (d throughSizes) fills() bool {
+	return d.edge > 0 && d.outer > 0 && quantity.AtLeast(d.outer, d.hole)
 }
 
 // ring is a body from the middle of the plate to a height.
@@ -182,12 +186,21 @@ func (b throughBuilder) dimensions(d throughSizes) (all []Dimension) {
 		return b.arrangement(other)
 	}})
 	add("length of the "+b.side, b.lengthKey, func(d *throughSizes) *quantity.Length { return &d.length })
-	add("hole radius", b.Hole.Radius.Key, func(d *throughSizes) *quantity.Length { return &d.hole })
+	all = append(all, Dimension{Name: "hole radius", Key: b.Hole.Radius.Key, Value: d.hole, With: func(v quantity.Length) *Arrangement {
+		other := d
+		if other.hole = v; quantity.AtLeast(d.outer, d.hole) {
+			other.outer = v // the sleeve goes on filling it
+		}
+		return b.arrangement(other)
+	}})
 	if d.edge > 0 {
 		add("edge radius of the hole", b.Hole.EdgeRadius.Key, func(d *throughSizes) *quantity.Length { return &d.edge })
 	}
 	if d.outer > 0 && d.bore > d.pin {
 		add("bore of the sleeve", b.Sleeve.InnerRadius.Key, func(d *throughSizes) *quantity.Length { return &d.bore })
+	}
+	if d.fills() {
+		add("width of the joint", b.Sleeve.JointWidth.Key, func(d *throughSizes) *quantity.Length { return &d.joint })
 	}
 	if d.outer > 0 && d.outer < d.hole {
 		add("outer radius of the sleeve", b.Sleeve.OuterRadius.Key, func(d *throughSizes) *quantity.Length { return &d.outer })

@@ -10,6 +10,7 @@ import (
 	"kilovet/hv/profile"
 	"kilovet/hv/quantity"
 	"kilovet/insulation"
+	"kilovet/insulation/field"
 	"kilovet/insulation/gap"
 	"kilovet/insulation/vacuum"
 	"kilovet/rules/build"
@@ -29,7 +30,7 @@ const (
 	resizedMost  = 4.0
 	littleStep   = 1.02
 	leastPower   = 0.03
-	mostMoves    = 6    // dimensions of a described arrangement that are tried
+	mostMoves    = 5    // dimensions of a described arrangement that are tried
 	justMet      = 0.97 // of what is allowed, from which a dimension serves
 	nothingAsked = "the rule is met"
 )
@@ -141,10 +142,11 @@ func (e *Evidence) search(d build.Dimension, weak Weak, asked, power float64) (q
 // try solves an arrangement with another dimension under the same voltages.
 func (e *Evidence) try(d build.Dimension, v quantity.Length, weak Weak) (tried, error) {
 	f := d.With(v)
-	s, err := solve(f)
-	if err == nil && weak.Settled {
-		s, err = s.Settled()
+	by := field.Solve
+	if weak.Settled {
+		by = field.SolveResistive
 	}
+	s, err := solveBy(f, by)
 	if err != nil {
 		return tried{}, err
 	}

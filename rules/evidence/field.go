@@ -16,7 +16,9 @@ func (e *Evidence) FieldOf(f *build.Arrangement) (*field.Solution, error) {
 	return remember(e.Under(Condition{}), "field "+f.Name.V, func() (*field.Solution, error) { return solve(f) })
 }
 
-func solve(f *build.Arrangement) (*field.Solution, error) {
+func solve(f *build.Arrangement) (*field.Solution, error) { return solveBy(f, field.Solve) }
+
+func solveBy(f *build.Arrangement, by func(field.Arrangement) (*field.Solution, error)) (*field.Solution, error) {
 	if f.Err != nil {
 		return nil, f.Err
 	}
@@ -24,7 +26,7 @@ func solve(f *build.Arrangement) (*field.Solution, error) {
 	if len(s.faults) > 0 {
 		return nil, spoilt(s.faults)
 	}
-	solution, err := field.Solve(s.Arrangement)
+	solution, err := by(s.Arrangement)
 	var wrong profile.Faults
 	if errors.As(err, &wrong) {
 		return nil, spoilt(wrong)

@@ -57,3 +57,17 @@ func wholeWith(t *testing.T, swaps ...string) *rules.Review {
 	t.Helper()
 	return reviewedWhole(t, []byte(columnText(t, swaps...)))
 }
+
+// A standing arc at the output drives one current through all that stands in series (closed
+// form: powers go as the resistances, 1 MΩ to 47 kΩ, but for what bleeder and divider draw
+// before the second), and a trip that rests on the return ends it.
+func TestPowerInAStandingArc(t *testing.T) {
+	r := wholeWith(t)
+	filter, end := provided(t, r, "series.arc_power", "filter.1.resistor"), provided(t, r, "series.arc_power", "cable.gun_end_resistor")
+	nearly(t, "powers", filter/end, 1e6/47e3, 5e-3)
+	for subject, want := range map[string]rule.Verdict{"filter.1.resistor": rule.Marginal, "cable.gun_end_resistor": rule.Meets} {
+		if v := verdictOf(r, "series.arc_power", subject); v != want {
+			t.Errorf("%s: %s, want %s", subject, v, want)
+		}
+	}
+}

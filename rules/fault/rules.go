@@ -12,7 +12,7 @@ import (
 
 // Rules lists the rules of this family.
 func Rules() []rule.Rule {
-	return []rule.Rule{computed, ratings, gaps, reached, overVoltageTrip, overCurrentTrip}
+	return []rule.Rule{computed, ratings, gaps, reached, overVoltageTrip, overCurrentTrip, standingArc}
 }
 
 var faultSource = rule.Source{Text: "one fault at a time with what follows from it (IEC 61010-1 4.4, from memory)", Mark: rule.Memory, Governs: true}
@@ -86,6 +86,7 @@ var ratings = rule.Rule{
 	Example: rule.Example{
 		Swaps: []rule.Swap{{Was: `over_current = { trip = "200 uA", senses = "return", acts_on = "drive supply" }`, Becomes: ""}},
 		Changes: []rule.Change{
+			{Rule: "series.arc_power", Subject: "filter.1.resistor", Verdict: rule.Fails},
 			{Rule: "fault.rating", Subject: "arc", Verdict: rule.Marginal},
 			{Rule: "fault.rating", Subject: "cable shorted", Verdict: rule.Marginal},
 			{Rule: "fault.rating", Subject: "bleeder shorted", Verdict: rule.Marginal},

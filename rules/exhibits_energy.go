@@ -40,7 +40,7 @@ func nodeEnergy(e *evidence.Evidence) []exhibit.Table {
 		if err != nil {
 			continue
 		}
-		i, errI := e.TouchCurrent(node)
+		i, errI := e.Available(node)
 		d, errD := e.DischargeOf(node)
 		u, errU := e.Unplugged(node)
 		t.Rows = append(t.Rows, []exhibit.Cell{exhibit.Words(node), exhibit.Number(r.Voltage), exhibit.Number(r.Short.Charge), exhibit.Number(r.Short.Energy),
@@ -100,7 +100,7 @@ func mostOf(e *evidence.Evidence) most {
 		if r, err := e.Reachable(node); err == nil {
 			v, q, w = max(v, float64(r.Voltage)), max(q, float64(r.Short.Charge)), max(w, float64(r.Short.Energy))
 		}
-		if c, err := e.TouchCurrent(node); err == nil {
+		if c, err := e.Available(node); err == nil {
 			i = max(i, float64(c))
 		}
 	}

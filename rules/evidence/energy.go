@@ -1,7 +1,11 @@
 package evidence
 
 import (
+	"strconv"
+	"strings"
+
 	"kilovet/hv/circuit"
+	"kilovet/hv/lack"
 	"kilovet/hv/quantity"
 	"kilovet/hv/steady"
 )
@@ -159,6 +163,27 @@ func (e *Evidence) TouchCurrent(node string) (quantity.Current, error) {
 		f, err := p.Through(body)
 		return f.Peak, err
 	})
+}
+
+// longLadder is the number of stages above which the current that a person draws is
+// worked out at the ends of a ladder only: each node between takes a search of its own.
+const longLadder = 8
+
+// Available is the touch current of a node, for print: not of the nodes within a long
+// ladder.
+func (e *Evidence) Available(node string) (quantity.Current, error) {
+	if n := e.chain.Multiplier.Stages.V; n > longLadder && e.within(node, n) {
+		return 0, lack.Failed("not computed within a ladder of more than %d stages: see its ends", longLadder)
+	}
+	return e.TouchCurrent(node)
+}
+
+// within reports whether a node is one of a ladder's between its first and its last stage.
+func (e *Evidence) within(node string, stages int) bool {
+	name := e.canonical(node)
+	column, _, _ := strings.Cut(name, ".")
+	k, err := strconv.Atoi(name[strings.LastIndex(name, ".")+1:])
+	return err == nil && (column == "stage" || column == "coupling") && k > 1 && k < stages
 }
 
 // Discharge is how long a node stays above 60 V after switching off.

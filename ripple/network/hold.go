@@ -48,7 +48,7 @@ func (o *HoldOptions) together() (quantity.Voltage, *Periodic, error) {
 		return 0, nil, lack.Failed("there is no node %s that is tied to ground", o.Node)
 	}
 	h := newSearch(newShooter(s))
-	h.level = &level{span: s.between(n, circuit.Ground), set: o.signed(c), drive: 1, base: make([]float64, s.states())}
+	h.level = &level{span: s.between(n, circuit.Ground), set: o.signed(c), drive: 1, trust: 1, base: make([]float64, s.states())}
 	p, err := h.solve(o.From)
 	if err != nil {
 		return 0, nil, err

@@ -14,6 +14,9 @@ type level struct {
 	set   float64
 	drive float64   // over that of the circuit that was given
 	base  []float64 // the state by the circuit between the peaks at this drive
+
+	lifted float64 // by which the mean was to change last
+	trust  float64 // what it changed by over what it was to
 }
 
 // held is the part of the voltage to be held by which the mean may be off.
@@ -86,28 +89,45 @@ func (s *search) shifted(u []float64, part float64) {
 	copy(u, s.pace.stage[2])
 }
 
-// lift changes the drive by a factor, and the state with it.
+// lift changes the drive so that the mean comes nearer by a factor, and the state with
+// it. How much drive that takes is what the circuit between the peaks says, put right by
+// how well it said so the last time: a loaded ladder gives way by more than its drive.
 func (s *search) lift(f float64) {
 	l := s.level
+	f = math.Max(0.5, math.Min(2, f))
+	wanted := l.set * (1 - 1/f)
+	if l.lifted != 0 {
+		l.trust = math.Max(0.3, math.Min(3, l.trust*(1-wanted/l.lifted)))
+	}
 	axpy(-1, l.base, s.x)
-	s.driveTo(l.drive * math.Max(0.25, math.Min(4, f)))
+	before, from := s.foreseen(), l.drive
+	s.driveTo(from * f)
+	if slope := (s.foreseen() - before) / (l.drive - from); slope*l.set > 0 {
+		s.driveTo(math.Max(from/2, math.Min(2*from, from+wanted/slope/l.trust)))
+	}
+	l.lifted = wanted
 	axpy(1, l.base, s.x)
+}
+
+// foreseen is the mean of the voltage in the circuit between the peaks.
+func (s *search) foreseen() float64 {
+	l, n := s.level, s.n
+	return l.span.offset.direct + (l.span.difference(s.peaks.u[:n])+l.span.difference(s.peaks.u[n:]))/2
 }
 
 // aim guesses the drive from the circuit between the peaks.
 func (s *search) aim() {
 	const passes = 3 // drops and loads do not grow with the drive
-	l, n := s.level, s.n
+	l := s.level
 	if l == nil {
 		return
 	}
-	copy(l.base, s.x)
 	for range passes {
-		mean := l.span.offset.direct + (l.span.difference(s.peaks.u[:n])+l.span.difference(s.peaks.u[n:]))/2
-		if f := l.set / mean; f > 0 && !math.IsInf(f, 0) {
+		if f := l.set / s.foreseen(); f > 0 && !math.IsInf(f, 0) {
 			s.lift(f)
 		}
 	}
+	l.trust, l.lifted = 1, 0
 }
 
 // spot is a state a search may go back to.
@@ -140,5 +160,7 @@ func (s *search) returnTo(p *spot) {
 	}
 	drive := s.level.drive
 	s.goBack(p)
-	s.lift(drive / p.drive)
+	axpy(-1, s.level.base, s.x)
+	s.driveTo(drive)
+	axpy(1, s.level.base, s.x)
 }

@@ -74,6 +74,9 @@ func (s *search) search(from *Periodic) (*Periodic, error) {
 	for _, a := range attempts() {
 		s.driveTo(1)
 		s.guess(a.press / float64(1+len(s.diodes)*len(s.diodes)))
+		if s.level != nil {
+			copy(s.level.base, s.x)
+		}
 		if from != nil {
 			s.startFrom(from)
 			from = nil

@@ -117,6 +117,11 @@ func (e *Evidence) peakFor(set quantity.Voltage) (trial, error) {
 
 // firstPeak is a drive to begin the search with: one that is near, or the full one.
 func (e *Evidence) firstPeak() quantity.Voltage {
+	if e.before != nil {
+		if t, err := e.before.Under(e.condition).trial(); err == nil {
+			return t.peak
+		}
+	}
 	if e.condition.Corner != Nominal {
 		nominal := e.condition
 		nominal.Corner = Nominal

@@ -178,12 +178,12 @@ func (e *Evidence) Available(node string) (quantity.Current, error) {
 	return e.TouchCurrent(node)
 }
 
-// within reports whether a node is one of a ladder's between its first and its last stage.
+// within reports whether a node is one of a ladder's below its last stage.
 func (e *Evidence) within(node string, stages int) bool {
 	name := e.canonical(node)
 	column, _, _ := strings.Cut(name, ".")
 	k, err := strconv.Atoi(name[strings.LastIndex(name, ".")+1:])
-	return err == nil && (column == "stage" || column == "coupling") && k > 1 && k < stages
+	return err == nil && (column == "stage" || column == "coupling") && k < stages
 }
 
 // Discharge is how long a node stays above 60 V after switching off.

@@ -68,26 +68,34 @@ func (s *search) solve(from *Periodic) (*Periodic, error) {
 	return s.search(from)
 }
 
-// search searches in one way after the other.
+// search searches from the state of a similar circuit where there is one, as long as
+// Newton's method gets there by itself, and then in one way after the other.
 func (s *search) search(from *Periodic) (*Periodic, error) {
+	if from != nil {
+		s.prepare(0)
+		s.startFrom(from)
+		if s.begin(attempt{}) == nil {
+			return s.refine()
+		}
+	}
 	var err error
 	for _, a := range attempts() {
-		s.driveTo(1)
-		s.guess(a.press / float64(1+len(s.diodes)*len(s.diodes)))
-		if s.level != nil {
-			copy(s.level.base, s.x)
-		}
-		if from != nil {
-			s.startFrom(from)
-			from = nil
-		} else {
-			s.aim()
-		}
+		s.prepare(a.press / float64(1+len(s.diodes)*len(s.diodes)))
+		s.aim()
 		if err = s.begin(a); err == nil {
 			return s.refine()
 		}
 	}
 	return nil, err
+}
+
+// prepare guesses a state at the given drive.
+func (s *search) prepare(press float64) {
+	s.driveTo(1)
+	s.guess(press)
+	if s.level != nil {
+		copy(s.level.base, s.x)
+	}
 }
 
 // nearby is the correction, in parts of the state, that ends the search in the rough grade:

@@ -206,3 +206,30 @@ func TestASphereGapShowsItsTable(t *testing.T) {
 		t.Errorf("estimate %v against %v of the table", a.Value, last.Value)
 	}
 }
+
+// Conductors of a board stand what needle points at their distance do: AIEE, 10 kV crest at
+// 8.5 mm and 25 °C; coated no less; on an assumption, and not without a distance.
+func TestBoardsAreJudgedByPhysicsToo(t *testing.T) {
+	g := gap.Gap{Medium: gap.PrintedBoard, Clearance: 8.5e-3, Temperature: 298.15, Pressure: 101325}
+	for _, board := range []gap.Board{"", gap.ConformalCoated, gap.Internal} {
+		g.Board = board
+		a, err := insulation.Breakdown(g, gap.Unknown)
+		if err != nil || len(a.Assumptions) == 0 {
+			t.Fatalf("%s: %v, %v", board, a.Assumptions, err)
+		}
+		near(t, string(board), float64(a.Value), 10e3, 1e-9)
+		d, err := insulation.ClearanceForBreakdown(g, 10e3, gap.Unknown)
+		if err != nil {
+			t.Fatal(err)
+		}
+		near(t, "inverted", float64(d), 8.5e-3, 1e-6)
+	}
+	g.Creepage, g.Clearance = g.Clearance, 0
+	if a, err := insulation.Breakdown(g, gap.Unknown); err != nil || !quantity.Equal(a.Value, 10e3) {
+		t.Errorf("by the creepage: %v (%v)", a.Value, err)
+	}
+	g.Creepage = 0
+	if _, err := insulation.Breakdown(g, gap.Unknown); lack.Of(err) == nil {
+		t.Error("a board without a distance stands something")
+	}
+}

@@ -120,6 +120,9 @@ func breakdown(g gap.Gap, sharp gap.Polarity, starts gap.Result[quantity.Voltage
 	if breakdown := mediumOf(g).breakdown; breakdown != nil {
 		return breakdown(g)
 	}
+	if g.Medium == gap.PrintedBoard {
+		return acrossBoard(g)
+	}
 	if err := inGas(g); err != nil {
 		return none, err
 	}

@@ -17,20 +17,37 @@ import (
 // gapFlags are the keys of a spacing and its site as flags.
 type gapFlags struct {
 	set   *pflag.FlagSet
-	keys  []document.Declared // leaves of [site], then of [[spacing]], and the shape
-	sizes []document.Declared // of the shape
+	keys  []document.Declared // leaves of [site], then of [[spacing]], and the tables within
+	sizes []document.Declared // of the shape and the ribs
 }
 
 // ofSite are the keys of the site that a gap between no nodes depends on.
 var ofSite = []string{"site.altitude", "site.air_temperature", "site.pollution_degree"}
 
-// ofNodes are the keys of a spacing that say between which nodes it lies.
-var ofNodes = []string{"spacing.from", "spacing.to", "spacing.also"}
+// elsewhere are the keys of a spacing that name what no flag describes: nodes and fields.
+var elsewhere = []string{"spacing.from", "spacing.to", "spacing.also", "spacing.field"}
 
 const (
 	shapePath = "spacing.shape"
+	ribsPath  = "spacing.ribs"
 	gapName   = "gap" // where none is given
 )
+
+// within are the tables of a spacing that are one flag each, with what their flag means.
+var within = map[string][2]string{
+	shapePath: {"SHAPE", "electrodes and their sizes, as in 'coaxial inner_radius=3mm outer_radius=63mm'"},
+	ribsPath:  {"RIBS", "ribs across the surface, over which the creepage is measured, as in 'count=5 depth=8mm width=5mm'"},
+}
+
+// tableOf is the table within a spacing that a key belongs to, empty where none.
+func tableOf(path string) string {
+	for _, table := range []string{shapePath, ribsPath} {
+		if strings.HasPrefix(path, table+".") {
+			return table
+		}
+	}
+	return ""
+}
 
 // newGapFlags declares the flags from the declaration of the description.
 func newGapFlags(set *pflag.FlagSet) *gapFlags {
@@ -38,12 +55,12 @@ func newGapFlags(set *pflag.FlagSet) *gapFlags {
 	for _, d := range document.Describe(&chain.Chain{}) {
 		table, rest, _ := strings.Cut(d.Path, ".")
 		switch {
-		case strings.HasPrefix(d.Path, shapePath+"."):
+		case tableOf(d.Path) != "":
 			g.sizes = append(g.sizes, d)
-		case d.Path == shapePath:
+		case within[d.Path] != [2]string{}:
 			g.keys = append(g.keys, d)
-			set.Var(&gapValue{kind: "SHAPE"}, flagName(d), "electrodes and their sizes, as in 'coaxial inner_radius=3mm outer_radius=63mm'")
-		case slices.Contains(ofSite, d.Path), table == "spacing" && leaf(d, rest) && !slices.Contains(ofNodes, d.Path):
+			set.Var(&gapValue{kind: within[d.Path][0]}, flagName(d), within[d.Path][1])
+		case slices.Contains(ofSite, d.Path), table == "spacing" && leaf(d, rest) && !slices.Contains(elsewhere, d.Path):
 			g.keys = append(g.keys, d)
 			g.declare(d)
 		}
@@ -136,8 +153,8 @@ func (g *gapFlags) block() (block []byte, flags []string) {
 
 func (g *gapFlags) line(d document.Declared) string {
 	text := g.set.Lookup(flagName(d)).Value.String()
-	if d.Path == shapePath {
-		return "shape = " + g.shape(text)
+	if within[d.Path] != [2]string{} {
+		return d.Key + " = " + g.table(d.Path, text)
 	}
 	return d.Assign(text)
 }
@@ -145,30 +162,34 @@ func (g *gapFlags) line(d document.Declared) string {
 // sizeKey begins a size in the text of a shape.
 var sizeKey = regexp.MustCompile(`[\s,]*([A-Za-z0-9_-]+)\s*=`)
 
-// shape makes the table of a shape from "coaxial inner_radius=3mm outer_radius=63mm".
-func (g *gapFlags) shape(text string) string {
+// table makes a table from "coaxial inner_radius=3mm outer_radius=63mm"; what stands before
+// the first size is the kind of a shape.
+func (g *gapFlags) table(path, text string) string {
 	at := sizeKey.FindAllStringSubmatchIndex(text, -1)
 	kind := text
 	if len(at) > 0 {
 		kind = text[:at[0][0]]
 	}
-	pairs := []string{g.size("kind").Assign(strings.TrimSpace(kind))}
+	var pairs []string
+	if kind = strings.TrimSpace(kind); path == shapePath || kind != "" {
+		pairs = append(pairs, g.size(path, "kind").Assign(kind))
+	}
 	for i, m := range at {
 		end := len(text)
 		if i+1 < len(at) {
 			end = at[i+1][0]
 		}
 		value := strings.TrimRight(strings.TrimSpace(text[m[1]:end]), ",")
-		pairs = append(pairs, g.size(text[m[2]:m[3]]).Assign(strings.TrimSpace(value)))
+		pairs = append(pairs, g.size(path, text[m[2]:m[3]]).Assign(strings.TrimSpace(value)))
 	}
 	return "{ " + strings.Join(pairs, ", ") + " }"
 }
 
-// size is the declaration of a key of shapes; an unknown one is a text, for the reader
-// to refuse.
-func (g *gapFlags) size(key string) document.Declared {
+// size is the declaration of a key of a table; an unknown one is a text, for the reader to
+// refuse.
+func (g *gapFlags) size(path, key string) document.Declared {
 	for _, d := range g.sizes {
-		if d.Key == key {
+		if d.Key == key && tableOf(d.Path) == path {
 			return d
 		}
 	}
@@ -199,8 +220,8 @@ func (g *gapFlags) read(block []byte, flags []string) (*chain.Chain, []string) {
 
 func faultOf(flag string, f document.Fault) string {
 	text := "--" + flag + ": "
-	if inner, ok := strings.CutPrefix(f.Key, shapePath+"."); ok {
-		text += inner + ": "
+	if table := tableOf(f.Key); table != "" {
+		text += strings.TrimPrefix(f.Key, table+".") + ": "
 	}
 	text += f.What
 	if f.Remedy != "" {

@@ -16,6 +16,7 @@ type Spacing struct {
 	Lasting    Condition // where the lasting voltage is highest
 	Gap        gap.Gap
 	Assessment insulation.Assessment
+	Computed   bool // a computed field judges in place of the closed shape
 }
 
 // Spacings are the described spacings and those of the feedthroughs.
@@ -60,7 +61,7 @@ func (e *Evidence) Spacing(s *chain.Spacing) (Spacing, error) {
 			return Spacing{}, err
 		}
 		g := e.gap(s)
-		x := Spacing{v, under, lasting, g, insulation.Assess(g, v)}
+		x := Spacing{v, under, lasting, g, insulation.Assess(g, v), false}
 		e.byField(s, &x)
 		return x, nil
 	})
@@ -78,7 +79,7 @@ func (e *Evidence) spacingInFault(s *chain.Spacing) (Spacing, error) {
 	return remember(e, "spacing "+s.Name.V, func() (Spacing, error) {
 		v := usual.Voltages
 		v.Peak = peak.Value
-		x := Spacing{v, peak.Under, usual.Lasting, usual.Gap, insulation.Assess(usual.Gap, v)}
+		x := Spacing{v, peak.Under, usual.Lasting, usual.Gap, insulation.Assess(usual.Gap, v), false}
 		e.Healthy().byField(s, &x) // its field is that of the same line, for each volt
 		return x, nil
 	})

@@ -20,6 +20,7 @@ func (e *Evidence) byField(s *chain.Spacing, x *Spacing) {
 		return
 	}
 	closed := x.Assessment
+	x.Computed = true
 	if err != nil {
 		none := lack.Of(err)
 		x.Assessment.FieldPeak = gap.Result[quantity.Field]{Lack: none}

@@ -102,7 +102,7 @@ func againstBreakdown(s *chain.Spacing, x evidence.Spacing) string {
 // sided is what it would change to say that the sharper electrode is the negative one.
 func sided(s *chain.Spacing, x evidence.Spacing) string {
 	v, err := x.IfNegative()
-	if err != nil || s.Field.Set() || s.Of != nil || quantity.AtMost(v, x.Assessment.Breakdown.Value) {
+	if err != nil || x.Computed || s.Of != nil || quantity.AtMost(v, x.Assessment.Breakdown.Value) {
 		return ""
 	}
 	return "say spacing.sharper_electrode: if that is the negative one the gap stands " + quantity.Text(v)

@@ -50,7 +50,7 @@ func judgeBreakdown(e *evidence.Evidence, s *chain.Spacing) rule.Finding {
 	}
 	stands := x.Assessment.Breakdown
 	if stands.Lack != nil {
-		return unanswered(f, x, s.Field.Set())
+		return unanswered(f, x)
 	}
 	f.Under = x.Under.Text()
 	f.Sources = append(append(rule.Cited(stands.Sources), breakdownSource), shown(stands.Answer)...)
@@ -106,7 +106,7 @@ func judgeCorona(e *evidence.Evidence, s *chain.Spacing) (rule.Finding, string) 
 	onset := x.Assessment.Onset
 	if onset.Lack != nil {
 		least, err := x.OnsetAtLeast()
-		if err != nil || s.Field.Set() || !quantity.AtMost(x.Voltages.Peak, least.Value) {
+		if err != nil || x.Computed || !quantity.AtMost(x.Voltages.Peak, least.Value) {
 			return f.Lacking(onset.Lack), ""
 		}
 		onset.Answer = least

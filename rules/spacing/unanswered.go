@@ -12,9 +12,9 @@ import (
 
 // unanswered judges a gap whose breakdown no law gives at its distance by its bounds: it
 // holds under the lower, fails above the upper and is unassessed between.
-func unanswered(f rule.Finding, x evidence.Spacing, computed bool) rule.Finding {
+func unanswered(f rule.Finding, x evidence.Spacing) rule.Finding {
 	why := x.Assessment.Breakdown.Lack
-	if computed { // the line of a computed field has no other distance
+	if x.Computed { // the line of a computed field has no other distance
 		return f.Lacking(why)
 	}
 	b, v := x.BreakdownBounds(), x.Voltages.Peak

@@ -97,8 +97,8 @@ func (c *checker) reading(s *plan.Step, r *Reading, read map[string]bool) {
 		c.fault(r.Instrument.Place, fmt.Sprintf("%q a second time in one step", r.Instrument.V), "keep one")
 	}
 	read[r.Instrument.V] = true
-	if !r.Value.Set() {
-		return
+	if !r.Value.Set() || r.Value.V == "" {
+		return // nothing was read, or it is a fault already that it is no text
 	}
 	d := quantity.DimensionOf(expected.Unit)
 	v, err := d.Parse(r.Value.V)

@@ -47,7 +47,8 @@ func (w world) compareReadings(description, form string) error {
 	if err != nil {
 		return err
 	}
-	e := evidence.New(c)
+	progress := w.progress()
+	e := evidence.New(c).Telling(progress.tell)
 	made, err := plan.Of(e)
 	if err != nil {
 		return exitf(unsound, "nothing to compare with: %v", err)
@@ -59,7 +60,12 @@ func (w world) compareReadings(description, form string) error {
 	if err := belongs(f, given, filled.name); err != nil {
 		return err
 	}
-	return w.say(e, made, f, c)
+	said, err := readings.Of(e, made, f)
+	progress.end()
+	if err != nil {
+		return exitf(unsound, "the readings cannot be compared: %v", err)
+	}
+	return w.say(said, c)
 }
 
 // belongs refuses readings that were taken on another description.
@@ -70,11 +76,7 @@ func belongs(f *readings.File, given source, name string) error {
 	return nil
 }
 
-func (w world) say(e *evidence.Evidence, made *plan.Plan, f *readings.File, c *chain.Chain) error {
-	said, err := readings.Of(e, made, f)
-	if err != nil {
-		return exitf(unsound, "the readings cannot be compared: %v", err)
-	}
+func (w world) say(said *readings.Comparison, c *chain.Chain) error {
 	if err := w.show(procedure.Readings(said, procedure.Options{Width: min(w.columns(), 100), Title: c.Title.V})); err != nil {
 		return err
 	}

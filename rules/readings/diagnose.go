@@ -163,10 +163,16 @@ func (b *bench) tryAll(list []hypothesis) []trial {
 	trials := make([]trial, len(list))
 	next := make(chan int)
 	var done sync.WaitGroup
+	var telling sync.Mutex
+	tried := 0
 	for range runtime.GOMAXPROCS(0) {
 		done.Go(func() {
 			for i := range next {
 				trials[i] = b.try(list[i])
+				telling.Lock()
+				tried++
+				b.e.Tell("what the readings point to", tried, len(list))
+				telling.Unlock()
 			}
 		})
 	}

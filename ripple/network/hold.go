@@ -24,14 +24,25 @@ type HoldOptions struct {
 // the load pulls the node to nothing, where there is no such node, and where no peak is
 // found in a dozen trials.
 func Hold(o HoldOptions) (quantity.Voltage, *Periodic, error) {
-	if peak, p, err := o.together(); err == nil {
+	if peak, p, err := o.together(0); err == nil {
 		return peak, p, nil
 	}
 	return o.byTrials()
 }
 
-// together seeks drive and state at once.
-func (o *HoldOptions) together() (quantity.Voltage, *Periodic, error) {
+// Seek is Hold for those who have another way: it gives up where drive and state are not
+// found together in little more than an ordinary search takes.
+func Seek(o HoldOptions) (quantity.Voltage, *Periodic, error) {
+	c, err := o.Build(o.First)
+	if err != nil {
+		return 0, nil, err
+	}
+	return o.together(2000 + 100*len(c.Elements))
+}
+
+// together seeks drive and state at once, in at most a number of steps where that is
+// given.
+func (o *HoldOptions) together(most int) (quantity.Voltage, *Periodic, error) {
 	c, err := o.Build(o.First)
 	if err != nil {
 		return 0, nil, err
@@ -48,6 +59,9 @@ func (o *HoldOptions) together() (quantity.Voltage, *Periodic, error) {
 		return 0, nil, lack.Failed("there is no node %s that is tied to ground", o.Node)
 	}
 	h := newSearch(newShooter(s))
+	if most > 0 {
+		h.most = most
+	}
 	h.level = &level{span: s.between(n, circuit.Ground), set: o.signed(c), drive: 1, trust: 1, base: make([]float64, s.states())}
 	p, err := h.solve(o.From)
 	if err != nil {

@@ -13,6 +13,7 @@ type search struct {
 	*envelope
 	level     *level  // the voltage to be held; nil where the drive is given
 	sound     spot    // the last state that was not a step back
+	most      int     // steps that all attempts together may take
 	patience  int     // leaps it may take
 	last      float64 // change over the period at the state corrected last
 	trial     bool    // the last correction has yet to prove itself
@@ -31,7 +32,9 @@ const (
 func newSearch(s *shooter) *search {
 	e := newEnvelope(s)
 	e.hurried = true
-	return &search{envelope: e}
+	h := &search{envelope: e}
+	h.most = 20000 + h.budget()
+	return h
 }
 
 // approach corrects the state in one grade until a correction is a small part of it.
@@ -85,7 +88,7 @@ func (s *search) until(g grade, done func() bool) error {
 func (s *search) budget() int { return 20000 + 500*len(s.diodes) }
 
 // spent reports whether all attempts together have had their steps: about two searches.
-func (s *search) spent() bool { return s.pace.work.Steps > 20000+s.budget() }
+func (s *search) spent() bool { return s.pace.work.Steps > s.most }
 
 // exacting is the part of what the diodes pass below which corrections of the
 // charges ask for events to be located as well as the arithmetic allows.

@@ -54,6 +54,15 @@ func Settle(c *circuit.Circuit, failed Failed, o Options) (Settled, error) {
 	return s, lack.Failed("what strikes and what ends does not come to rest")
 }
 
+// AtRest reports whether nothing strikes and nothing ends in a state, so that it is where
+// the circuit settles.
+func AtRest(p *Periodic) bool {
+	_, unfed := fed(p.Circuit)
+	_, struck := strike(p.Circuit, p)
+	_, ended := end(p.Circuit, p)
+	return len(unfed)+len(struck)+len(ended) == 0
+}
+
 // withoutLoads takes out every constant current.
 func withoutLoads(c *circuit.Circuit) (*circuit.Circuit, []string) {
 	var ended []string

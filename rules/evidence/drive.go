@@ -104,15 +104,18 @@ func (e *Evidence) peakFor(set quantity.Voltage) (trial, error) {
 	peak, at, err := network.Hold(network.HoldOptions{
 		Node: e.chain.Divider.Senses.Or("output"), Set: set, First: e.firstPeak(),
 		Options: network.Options{Frequency: e.chain.Drive.Frequency.V, From: e.alike()},
-		Build: func(peak quantity.Voltage) (*circuit.Circuit, error) {
-			c, err := e.circuitAt(peak)
-			if err != nil {
-				return nil, err
-			}
-			return trusted(c), nil
-		},
+		Build:   e.trustedAt,
 	})
 	return trial{peak, at}, err
+}
+
+// trustedAt is the circuit at a drive, doubts outside the multiplier set aside.
+func (e *Evidence) trustedAt(peak quantity.Voltage) (*circuit.Circuit, error) {
+	c, err := e.circuitAt(peak)
+	if err != nil {
+		return nil, err
+	}
+	return trusted(c), nil
 }
 
 // firstPeak is a drive to begin the search with: one that is near, or the full one.

@@ -102,6 +102,9 @@ func (e *Evidence) regulated() (failure, error) {
 	if err != nil {
 		return failure{}, err
 	}
+	if at, err := e.seek(wanted, peak); err == nil {
+		return at, nil
+	}
 	return network.Regulate(network.Regulation[failure]{
 		Wanted: wanted, First: peak, Limit: e.limit, Read: e.read,
 		At: func(peak quantity.Voltage, before *failure) (failure, error) {
@@ -112,6 +115,26 @@ func (e *Evidence) regulated() (failure, error) {
 			return e.settle(peak, from)
 		},
 	})
+}
+
+// seek finds where the regulation holds its reading, where nothing strikes or ends there.
+func (e *Evidence) seek(wanted, first quantity.Voltage) (failure, error) {
+	if e.condition.Fault.Strains || e.condition.Fault.Cuts {
+		return failure{}, lack.Failed("the regulation is likely to end at its limit")
+	}
+	peak, p, err := network.Seek(network.HoldOptions{
+		Node: "divider.tap", Set: wanted, First: first,
+		Options: network.Options{Frequency: e.chain.Drive.Frequency.V, From: e.alike()},
+		Build:   e.trustedAt,
+	})
+	if err != nil {
+		return failure{}, err
+	}
+	limit, err := e.limit()
+	if err != nil || peak > limit || p.Circuit.Reference() != "ground" || !network.AtRest(p) {
+		return failure{}, lack.Failed("the regulation does not simply hold its reading")
+	}
+	return failure{network.Settled{Periodic: p}, peak, p.Circuit}, nil
 }
 
 // wanted is what the regulation wants to read at the tap, and the drive it begins with.

@@ -147,11 +147,11 @@ func (n *writer) standing(c digest.Chapter, findings []rule.Finding) []Block {
 }
 
 func (n *writer) reasons(c digest.Chapter, f rule.Finding) Cell {
-	all := []Line{plain(f.Because), labelled("Remedy:", f.Remedy), labelled("Missing:", strings.Join(f.Missing, ", "))}
+	all := []Line{plain(f.Because), joined(labelled("Remedy:", f.Remedy), labelled("missing:", strings.Join(f.Missing, ", ")))}
 	for _, a := range f.Assumptions {
 		all = append(all, labelled("Assumed:", a))
 	}
-	return lines(append(all, n.sourceLine(f), n.seenLine(c, f))...)
+	return lines(append(all, joined(n.sourceLine(f), n.seenLine(c, f)))...)
 }
 
 // longTable is how many rows of a table stand on the sheets; tables put first what

@@ -300,8 +300,7 @@ func TestAFindingLeadsToItsSourcesAndFigures(t *testing.T) {
 		figure.Figure{ID: "spacing.creepage_needed", Subject: "gun feedthrough, air side", Value: 0.125, Unit: "m", What: "needed", Basis: "insulation"})
 	text := outline(page.New(r))
 	for _, want := range []string{
-		"judged by [1]; see also [2] links [{[1] source 1} {[2] source 2}]",
-		"see spacing.creepage_needed, spacing.voltage links [{spacing.creepage_needed figure spacing.creepage_needed gun feedthrough, air side}",
+		"judged by [1]; see also [2]; see spacing.creepage_needed, spacing.voltage links [{[1] source 1} {[2] source 2} {spacing.creepage_needed figure spacing.creepage_needed gun feedthrough, air side}",
 		`anchor "figure spacing.voltage gun feedthrough, air side"`,
 	} {
 		if !strings.Contains(text, want) {

@@ -63,9 +63,10 @@ func (w *flow) sheet() *sheet { return w.sheets[len(w.sheets)-1] }
 
 func (w *flow) fresh() bool { return w.y == w.top }
 
-// room turns the sheet where less than the height is left, unless it is empty.
+// room turns the sheet where less than the height is left, unless it is empty; again
+// where waiting figures have taken the next.
 func (w *flow) room(height float64) {
-	if w.y+height > w.bottom && !w.fresh() {
+	for w.y+height > w.bottom && !w.fresh() {
 		w.turn()
 	}
 }

@@ -88,7 +88,7 @@ func (w *flow) figures(all ...framed) {
 		w.sheet().lines(x, w.y+f.height+captionGap, f.caption)
 		x += f.width + figureGap
 	}
-	w.y += most + 1
+	w.y += most + 3
 }
 
 // framed draws a figure for a width, once for all that ask.

@@ -18,6 +18,7 @@ const (
 	between     = 6.0  // two columns
 	leastHalves = 40.0 // left of a sheet on which columns begin, unless all of it fits
 	slack       = 4.0  // by which the first column may be longer
+	leastColumn = 25.0 // of a first column
 	uneven      = 22.0 // of which one column may be higher so that no piece is broken
 )
 
@@ -96,7 +97,7 @@ func (h *halves) begin(w *flow) {
 	w.top, w.y = h.from, h.from
 	w.bottom = h.whole.bottom
 	if h.broken {
-		w.bottom = min(w.bottom, h.from+h.left/2+slack)
+		w.bottom = min(w.bottom, h.from+max(h.left/2+slack, leastColumn))
 	}
 	h.lowest = h.from
 }

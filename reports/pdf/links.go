@@ -122,7 +122,7 @@ func (w *flow) contents(c page.Contents) {
 	line := body.leading() + 1.2
 	rows := (len(c.Entries) + 1) / 2
 	w.gap(4)
-	w.room(float64(rows)*line + 7)
+	w.room(float64(rows)*line + 6)
 	w.sheet().add(stroke{w.left, w.y, w.right, w.y, 0.35, 0})
 	w.sheet().lines(w.left, w.y+1, w.fit(column, "Contents, with sheets", w.across, 1))
 	top := w.y + 6

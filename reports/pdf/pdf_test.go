@@ -212,14 +212,16 @@ func TestFirstSheetAnswers(t *testing.T) {
 func TestFirstSectionFillsOneSheet(t *testing.T) {
 	f := testFonts(t)
 	for name, r := range samples {
-		w := newFlow(f, a4, testPen())
-		w.turn()
-		w.section(page.New(r).Noted("Built-in example: no file was named").Sections[0])
-		if len(w.sheets) != 1 {
-			t.Errorf("%s: the first section takes %d sheets", name, len(w.sheets))
-		}
-		if got := words(w.sheets[0])[0]; got != "Built-in example: no file was named" {
-			t.Errorf("%s: the sheet begins with %q", name, got)
+		for _, p := range Papers {
+			w := newFlow(f, p.area(), testPen())
+			w.turn()
+			w.section(page.New(r).Noted("Built-in example: no file was named").Sections[0])
+			if len(w.sheets) != 1 {
+				t.Errorf("%s on %s: the first section takes %d sheets", name, p, len(w.sheets))
+			}
+			if got := words(w.sheets[0])[0]; got != "Built-in example: no file was named" {
+				t.Errorf("%s: the sheet begins with %q", name, got)
+			}
 		}
 	}
 	r := sample.Failing()

@@ -64,7 +64,7 @@ func (w *flow) row(r row) {
 // on top.
 func (w *flow) begin(r row, height float64) {
 	if w.y+height > w.bottom && !w.fresh() {
-		w.turn()
+		w.room(height)
 		r.repeat()
 	}
 }

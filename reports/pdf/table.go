@@ -70,7 +70,7 @@ func (w *flow) tableStart(t page.Table) float64 {
 // filled is the table cut to the rows that the sheet holds beside what follows it, at
 // least one, with a row that counts the others.
 func (w *flow) filled(t page.Table, after float64) page.Table {
-	room := w.bottom - after - w.y - 4 - w.headTall(t.Columns)
+	room := w.bottom - after - w.y - 4.5 - w.headTall(t.Columns)
 	rows := w.tableRows(t, func() {})
 	heights := func(upTo int) (sum float64) {
 		for _, r := range rows[:upTo] {

@@ -1,6 +1,7 @@
 package touch
 
 import (
+	"cmp"
 	"slices"
 	"strings"
 
@@ -77,4 +78,10 @@ func (a Absorption) Recharge(c quantity.Capacitance, u quantity.Voltage) (Rechar
 	}
 	back := u * quantity.Voltage(a.Most)
 	return Recharged{back, Charge(c, back), Energy(c, back)}, nil
+}
+
+// LargestAbsorption is the most that is published of any dielectric here: the bound for one
+// of which nothing is.
+func LargestAbsorption() Absorption {
+	return slices.MaxFunc(absorptions(), func(a, b Absorption) int { return cmp.Compare(a.Most, b.Most) })
 }

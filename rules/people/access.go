@@ -163,5 +163,5 @@ var restart = rule.Rule{
 
 // Rules lists the rules of this family.
 func Rules() []rule.Rule {
-	return []rule.Rule{touch, waiting, redundancy, rod, oneOpen, residue, rodVoltage, rodEnergy, enclosure, interlock, bonds, restart}
+	return []rule.Rule{touch, waiting, redundancy, rod, oneOpen, residue, recharge, rodVoltage, rodEnergy, enclosure, interlock, bonds, restart}
 }

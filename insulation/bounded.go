@@ -32,6 +32,7 @@ func atLeastUniform(g gap.Gap, s gas.State, l shape.Line) (gap.Answer[quantity.V
 	}
 	part := quantity.Voltage((d - low) / (high - low))
 	text.Value = under + part*(over-under)
+	text.AtLeast = true
 	text.Because = "the field at the electrode reaches that of plates, a lower bound; " + text.Because
 	text.Sources = append([]gap.Source{{Text: "an avalanche grows nowhere faster than at the peak field", Mark: gap.Derived, Governs: true}}, gap.Plain(text.Sources)...)
 	text.Assumptions = append(text.Assumptions, "round electrodes in "+string(s.Gas)+" are judged by the field of plates at the electrode, a lower bound: no ionisation coefficient is known here")

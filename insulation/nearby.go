@@ -16,15 +16,33 @@ type StrengthBounds struct {
 }
 
 // BreakdownBounds bounds the breakdown of a gap. The lower bound is one of air and gases,
-// whose laws also hold left of the Paschen minimum, and of surfaces in vacuum; the upper one
-// also that helium, argon, hydrogen and carbon dioxide stand no more than air.
+// whose laws also hold left of the Paschen minimum, and of surfaces in vacuum. The upper one
+// in other gases than air is that of plates, or that helium, argon, hydrogen and carbon
+// dioxide stand no more than air.
 func BreakdownBounds(g gap.Gap, sharp gap.Polarity) StrengthBounds {
 	law := func(g gap.Gap) (gap.Answer[quantity.Voltage], error) { return Breakdown(g, sharp) }
-	b := StrengthBounds{gap.ResultOf(narrower(g, law)), gap.ResultOf(wider(g, law))}
+	b := StrengthBounds{Least: gap.ResultOf(narrower(g, law))}
+	if g.Medium == gap.InGas && g.Filling() != gap.AirGas {
+		b.Most = gap.ResultOf(asPlates(g))
+	} else {
+		b.Most = gap.ResultOf(wider(g, law))
+	}
 	if b.Most.Lack != nil && weaker(g) {
 		b.Most = gap.ResultOf(asAir(g, sharp))
 	}
 	return b
+}
+
+// asPlates is what plates as far apart stand in the gas, more than which no other electrodes
+// do.
+func asPlates(g gap.Gap) (gap.Answer[quantity.Voltage], error) {
+	if g.Shape == nil {
+		return gap.Answer[quantity.Voltage]{}, lack.Key("spacing.shape")
+	}
+	g.Shape = &gap.Shape{Kind: gap.Plates}
+	a, err := wider(g, func(g gap.Gap) (gap.Answer[quantity.Voltage], error) { return Breakdown(g, gap.Unknown) })
+	a.Because = "plates as far apart, more than which no other electrodes stand: " + a.Because
+	return a, err
 }
 
 // OnsetAtLeast is the voltage under which no discharge starts in a gap whose onset no law

@@ -47,6 +47,8 @@ type Answer[Q quantity.Number] struct {
 	Sources     []Source // the governing one first
 	Assumptions []string // what was assumed; a verdict on them is at best marginal
 	Shown       []Beside[Q]
+	// AtLeast says that the truth may lie above: what exceeds the value is not known to fail.
+	AtLeast bool
 }
 
 // Beside is what another source says of the same quantity, shown and not judged.

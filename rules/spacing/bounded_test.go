@@ -82,3 +82,24 @@ func TestElectrodesTooSharpForAnyDistance(t *testing.T) {
 		}
 	}
 }
+
+// Round electrodes in nitrogen have a lower bound only: under it they hold, past what plates
+// as far apart stand (30.3 kV over 10 mm) they fail, between they are unassessed with both
+// said.
+func TestALowerBoundIsNoBreakdown(t *testing.T) {
+	at := func(kilovolts float64) rule.Finding {
+		return findings(t, site(0)+fmt.Sprintf("[[spacing]]\nname = \"g\"\nvoltage = \"%g kV\"\nclearance = \"10 mm\"\nmedium = \"gas\"\ngas = \"nitrogen\"\npressure = \"1013.25 mbar\"\ntemperature = \"20 degC\"\nshape = { kind = \"sphere-plane\", radius = \"5 mm\" }\n", kilovolts))["spacing.breakdown | g"]
+	}
+	for kilovolts, want := range map[float64]rule.Verdict{5: rule.Marginal, 9: rule.Marginal, 9.1: rule.Unassessed, 24.2: rule.Unassessed, 24.3: rule.Fails} {
+		f := at(kilovolts)
+		if f.Verdict != want {
+			t.Errorf("%g kV: %s: %s", kilovolts, f.Verdict, f.Because)
+		}
+		if strings.Contains(f.Because, "expected to break down") {
+			t.Errorf("%g kV: a bound is called the breakdown: %s", kilovolts, f.Because)
+		}
+	}
+	if f := at(15); !strings.Contains(f.Because, "at least 11.3") || !strings.Contains(f.Because, "at most 30.3") {
+		t.Error(f.Because)
+	}
+}

@@ -49,12 +49,16 @@ func judgeBreakdown(e *evidence.Evidence, s *chain.Spacing) rule.Finding {
 		return f.Lacking(err)
 	}
 	stands := x.Assessment.Breakdown
-	if stands.Lack != nil {
+	if stands.Lack != nil || beyondBound(x) {
 		return unanswered(f, x)
 	}
 	f.Under = x.Under.Text()
 	f.Sources = append(append(rule.Cited(stands.Sources), breakdownSource), shown(stands.Answer)...)
-	f.Because = fmt.Sprintf("%s across a gap expected to break down at %s (%s)", quantity.Text(x.Voltages.Peak), quantity.Text(stands.Value), stands.Because)
+	expected := "expected to break down at"
+	if stands.AtLeast {
+		expected = "that stands at least"
+	}
+	f.Because = fmt.Sprintf("%s across a gap %s %s (%s)", quantity.Text(x.Voltages.Peak), expected, quantity.Text(stands.Value), stands.Because)
 	remarks, cited := x.Remarks()
 	f.Because = strings.Join(append([]string{f.Because}, remarks...), "; ")
 	f.Sources = append(f.Sources, rule.Cited(cited)...)

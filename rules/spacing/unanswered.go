@@ -3,6 +3,7 @@ package spacing
 import (
 	"fmt"
 
+	"kilovet/hv/lack"
 	"kilovet/hv/quantity"
 	"kilovet/insulation"
 	"kilovet/rules/evidence"
@@ -10,10 +11,19 @@ import (
 	"kilovet/rules/rule"
 )
 
+// beyondBound reports whether a peak lies above what is only a lower bound of the breakdown.
+func beyondBound(x evidence.Spacing) bool {
+	stands := x.Assessment.Breakdown
+	return stands.AtLeast && !quantity.AtMost(x.Voltages.Peak, stands.Value*limits.BreakdownShare)
+}
+
 // unanswered judges a gap whose breakdown no law gives at its distance by its bounds: it
 // holds under the lower, fails above the upper and is unassessed between.
 func unanswered(f rule.Finding, x evidence.Spacing) rule.Finding {
 	why := x.Assessment.Breakdown.Lack
+	if why == nil {
+		why = lack.Failed("only a lower bound of the breakdown is known")
+	}
 	if x.Computed { // the line of a computed field has no other distance
 		return f.Lacking(why)
 	}

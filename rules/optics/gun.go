@@ -43,6 +43,9 @@ geometry = { aperture_radius = "0.5 mm", plate_thickness = "0.2 mm", tip_radius 
 		band := geometryGives(e, x)
 		if g.Cutoff.Set() {
 			f.Because = fmt.Sprintf("stated %s; %s", quantity.Text(g.Cutoff.V), band)
+			if bias, err := e.BiasVoltage(); err == nil && bias > x.High {
+				f.Because += fmt.Sprintf("; a gun of that geometry would not emit at the bias of %s", quantity.Text(bias))
+			}
 			return rule.One(f.Most(rule.Of(quantity.Fraction(max(x.Outside(g.Cutoff.V), 1))), rule.Of(quantity.Fraction(limits.CutoffApart)), limits.CutoffApart-1).WithoutRemedyIfMet())
 		}
 		bias, err := e.BiasVoltage()

@@ -46,6 +46,7 @@ func newScale(axis exhibit.Axis, from, to float64, free bool) scale {
 		a.from, a.to = from, to
 	case axis.Log:
 		a.from, a.to = math.Pow(10, math.Floor(math.Log10(from)+1e-9)), math.Pow(10, math.Ceil(math.Log10(to)-1e-9))
+	case max(math.Abs(from), math.Abs(to)) < leastShown: // no step between such values can be counted
 	default:
 		a.from, a.to = nearNought(from, to)
 	}
@@ -54,6 +55,9 @@ func newScale(axis exhibit.Axis, from, to float64, free bool) scale {
 	}
 	return a
 }
+
+// leastShown is what an axis tells from nought; nothing physical is as small.
+const leastShown = 1e-300
 
 // nearNought takes nought in where the values come as near to it as half their span.
 func nearNought(from, to float64) (float64, float64) {

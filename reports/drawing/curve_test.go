@@ -145,7 +145,9 @@ func TestTicksOfAnyValues(t *testing.T) {
 		parts := rapid.IntRange(1, 12).Draw(t, "parts")
 		a := newScale(exhibit.Axis{Unit: rapid.SampledFrom([]string{"V", "1", "s", "m", "Pa", "K", "ohm"}).Draw(t, "unit")}, from, to, false)
 		a.mark(parts, true)
-		slack := 1e-9 * math.Max(math.Abs(from), math.Abs(to))
+		// A value a billionth of a step beyond a round end, as rounding leaves it, counts
+		// as on it; no drawing shows that.
+		slack := 1e-9 * max(math.Abs(from), math.Abs(to), a.to-a.from)
 		if a.from > from+slack || a.to < to-slack || len(a.ticks) < 2 || len(a.ticks) > 2*parts+2 {
 			t.Fatalf("%d ticks from %g to %g for values from %g to %g", len(a.ticks), a.from, a.to, from, to)
 		}
@@ -155,6 +157,16 @@ func TestTicksOfAnyValues(t *testing.T) {
 			}
 		}
 	})
+}
+
+// Values so small that no step between them is a number are shown as nought.
+func TestTicksOfTheLeastValues(t *testing.T) {
+	for _, v := range []float64{math.SmallestNonzeroFloat64, -1e-310, 0} {
+		a := newScale(exhibit.Axis{Unit: "V"}, min(v, 0), max(v, 0), false)
+		if a.mark(4, true); len(a.ticks) < 2 || !(a.from < 0 && a.to > 0) {
+			t.Errorf("%g: %d ticks from %g to %g", v, len(a.ticks), a.from, a.to)
+		}
+	}
 }
 
 // Two lengths have one scale.

@@ -127,10 +127,16 @@ func overGaps(g gap.Gap, want float64, answer func(gap.Gap) (float64, error)) (q
 	}
 	law := func(d float64) (float64, error) { return answer(withGap(g, quantity.Length(d))) }
 	shortest, longest := reachOf(g, s)
-	if g.Medium != gap.Air && g.Medium != gap.InGas {
-		if shortest, longest, err = answered(shortest, longest, law); err != nil {
+	if g.Medium != gap.Air && (g.Medium != gap.InGas || g.Filling() != gap.AirGas) {
+		all, err := stretches(shortest, longest, law)
+		if err != nil {
 			return 0, err
 		}
+		s, err := holding(all, want, law)
+		if err != nil {
+			return 0, err
+		}
+		shortest, longest = s.from*(1+1e-9), s.to*(1-1e-9) // rounding must not leave it
 	}
 	return crossingOf(shortest, longest, want, law)
 }

@@ -156,7 +156,7 @@ func (n *writer) reasons(c digest.Chapter, f rule.Finding) Cell {
 
 // longTable is how many rows of a table stand on the sheets; tables put first what
 // matters most.
-const longTable = 48
+const longTable = 40
 
 // tables is the tables of a chapter.
 func (n *writer) tables(c digest.Chapter) []Block {

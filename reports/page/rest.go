@@ -117,9 +117,9 @@ func (n *writer) sourceTable() []Block {
 	if len(n.sources) == 0 {
 		return nil
 	}
-	t := Table{Columns: []Column{{Title: "No.", Share: 0.1}, {Title: "Source, and how it is known", Share: 0.9}}}
+	t := Table{Columns: []Column{{Title: "No.", Share: 0.08}, {Title: "Source, and how it is known", Share: 0.92}}}
 	for i, s := range n.sources {
-		t.Rows = append(t.Rows, Row{Anchor: sourceAnchor(i + 1), Cells: []Cell{lines(plain(sourceWord(i + 1))), lines(plain(s.Text + " (" + digest.Known(s) + ")"))}})
+		t.Rows = append(t.Rows, Row{Anchor: sourceAnchor(i + 1), Cells: []Cell{lines(small(sourceWord(i + 1))), lines(small(s.Text + " (" + digest.Known(s) + ")"))}})
 	}
 	return halved([]Block{t})
 }

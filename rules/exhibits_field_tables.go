@@ -110,11 +110,14 @@ func edgeTable(e *evidence.Evidence, f *build.Arrangement, s *field.Solution) ex
 		Columns: []exhibit.Column{{Head: "place"}, {Head: "between"}, {Head: "exponent", Unit: "1"}},
 		Note:    "The field goes with the distance to the power of the exponent: below nought it has no bound, and no peak. Fields in the medium, the greater of switched and settled.",
 	}
+	t.Columns = append(t.Columns, exhibit.Column{Head: "judged at", Unit: "m"})
 	for _, d := range evidence.EdgeDistances() {
 		t.Columns = append(t.Columns, exhibit.Column{Head: "at " + quantity.Text(d), Unit: "V/m"})
 	}
 	for _, x := range s.Edges() {
 		row := []exhibit.Cell{exhibit.Words(evidence.EdgeName(x)), exhibit.Words(joined(x)), exhibit.Number(quantity.Fraction(x.Exponent))}
+		judged, err := e.JudgedAt(f, x)
+		row = append(row, exhibit.OrWords(judged, err))
 		for _, d := range evidence.EdgeDistances() {
 			at, err := e.AtEdge(f, x, d)
 			if err != nil {

@@ -31,6 +31,11 @@ type fieldCase struct {
 	Results    struct {
 		Emax        map[string]struct{ Value float64 }
 		Capacitance map[string]struct{ Value float64 } `json:"capacitance_pF"`
+		Samples     map[string]struct {
+			At   [2]float64 `json:"at_rz"`
+			Emag struct{ Value float64 }
+		}
+		Other map[string]struct{ Value float64 }
 	}
 }
 
@@ -39,7 +44,11 @@ type fieldCase struct {
 func (c fieldCase) description() (text string, ok bool) {
 	var b strings.Builder
 	put := func(format string, args ...any) { fmt.Fprintf(&b, format+"\n", args...) }
-	put("format = 1\n[[field]]\nname = \"f\"\nmedium = \"vacuum\"")
+	put("format = 1\n[[field]]\nname = \"f\"\nmedium = \"vacuum\"\nprobes = [")
+	for name, sample := range c.Results.Samples {
+		put("{ name = %q, at = %s },", name, mm(sample.At))
+	}
+	put("]")
 	for i, s := range c.Geometry.Segments {
 		name, _, _ := strings.Cut(s.Tag, ":")
 		profile := fmt.Sprintf("profile = [%s, %s]", start(s.From), c.stroke(i, false))
@@ -95,7 +104,8 @@ func start(p [2]float64) string { return fmt.Sprintf("{ from = %s }", mm(p)) }
 func mm(p [2]float64) string { return fmt.Sprintf("[\"%.12g mm\", \"%.12g mm\"]", p[0], p[1]) }
 
 // TestFieldsThroughTheWholeTool describes each reference arrangement, reviews it, and
-// wants peaks within 0.2 % and capacitances within 0.05 %.
+// wants peaks within 0.2 %, capacitances within 0.05 %, points within 0.5 % on their side
+// of a surface, 2 % near a junction, and exponents within 0.01.
 func TestFieldsThroughTheWholeTool(t *testing.T) {
 	data, err := os.ReadFile("../insulation/field/testdata/cases.json")
 	if err != nil {
@@ -133,6 +143,52 @@ func TestFieldsThroughTheWholeTool(t *testing.T) {
 					t.Errorf("capacitance %s %g, want %g pF", pair, got*1e12, want.Value)
 				}
 			}
+			c.checkProbes(t, figures)
+			c.checkExponents(t, figures)
 		})
+	}
+}
+
+// checkProbes wants the field at every sample: the only one, or on the side of a surface
+// that its name tells.
+func (c fieldCase) checkProbes(t *testing.T, figures map[string]float64) {
+	for name, want := range c.Results.Samples {
+		tolerance := 5e-3
+		if strings.Contains(name, "junction") {
+			tolerance = 2e-2
+		}
+		inside := strings.Contains(name, "cer") || strings.Contains(name, "inside")
+		if strings.HasSuffix(c.ID, "er1_9.4") {
+			inside = !inside // there the dielectric is the outer body
+		}
+		best := math.Inf(1)
+		for key, got := range figures {
+			body, found := strings.CutPrefix(key, "field.at f/"+name)
+			if body == "/medium" && inside || body != "" && body != "/medium" && !inside || !found {
+				continue
+			}
+			best = math.Min(best, math.Abs(got/(want.Emag.Value*1e6)-1))
+		}
+		if !(best < tolerance) {
+			t.Errorf("%s: off by %.1e from %g", name, best, want.Emag.Value)
+		}
+	}
+}
+
+// checkExponents wants the exponent of the theory as the lowest of one of the electrodes.
+func (c fieldCase) checkExponents(t *testing.T, figures map[string]float64) {
+	for what, want := range c.Results.Other {
+		if !strings.HasPrefix(what, "theory_exponent") {
+			continue
+		}
+		best := math.Inf(1)
+		for key, got := range figures {
+			if strings.HasPrefix(key, "field.exponent ") {
+				best = math.Min(best, math.Abs(got-want.Value))
+			}
+		}
+		if !(best < 1e-2) {
+			t.Errorf("%s: off by %g from %g", what, best, want.Value)
+		}
 	}
 }

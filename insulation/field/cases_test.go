@@ -269,3 +269,21 @@ func (c refCase) checkBias(t *testing.T, s *Solution) {
 		}
 	}
 }
+
+// Room is the way to what does not end at the edge: the bore of the brazed sleeve lies
+// 3.9 mm from the edge of its plate, its end a tenth of a millimetre from the pin.
+func TestRoomBesideEdges(t *testing.T) {
+	s := reference(t, "c2_brazed_annulus0.1").solution(t)
+	seen := 0
+	for _, e := range s.Edges() {
+		for at, want := range map[[2]float64]float64{{6, 4}: 3.9e-3, {2.1, 20}: 0.1e-3} {
+			if e.At.Distance(*mm(at)) < 1e-9 {
+				seen++
+				within(t, "room", float64(s.Room(e)), want, 1e-6)
+			}
+		}
+	}
+	if seen != 2 {
+		t.Errorf("%d edges seen", seen)
+	}
+}

@@ -44,6 +44,22 @@ func (s *Solution) Edges() (list []Edge) {
 	return list
 }
 
+// Room is how far it is from an edge to the nearest conductor or surface of a dielectric
+// that does not end there: the gap beside it, or the thickness of what has the edge.
+func (s *Solution) Room(e Edge) quantity.Length {
+	room := quantity.Length(s.unit)
+	for i := range s.walls {
+		w := &s.walls[i]
+		line := &s.plane.Edges[w.edge]
+		if w.kind == natural || line.Start == e.junction.node || line.End == e.junction.node {
+			continue
+		}
+		_, far := line.Closest(e.At)
+		room = min(room, far)
+	}
+	return room
+}
+
 // Near is the field at a distance from an edge, along every surface that ends there,
 // on every side that belongs to the edge. Surfaces shorter than that are left out.
 func (f *Field) Near(e Edge, distance quantity.Length) ([]Reading, error) {

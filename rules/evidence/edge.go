@@ -12,8 +12,21 @@ import (
 )
 
 // EdgeDistance is where the field is judged before a sharp edge or a junction, at which
-// it has no greatest value.
+// it has no greatest value, unless there is less room.
 const EdgeDistance quantity.Length = 0.1e-3
+
+// roomShare is the part of the gap beside an edge, or of the thickness of what has it, at
+// which the field is judged at most: nothing there is rounded or filled any wider.
+const roomShare = 0.25
+
+// JudgedAt is where the field is judged before an edge of an arrangement.
+func (e *Evidence) JudgedAt(f *build.Arrangement, edge field.Edge) (quantity.Length, error) {
+	s, err := e.FieldOf(f)
+	if err != nil {
+		return 0, err
+	}
+	return min(EdgeDistance, roomShare*s.Room(edge)), nil
+}
 
 // EdgeDistances are those at which it is shown.
 func EdgeDistances() []quantity.Length {

@@ -16,7 +16,7 @@ import (
 
 var edge = rule.Rule{
 	ID: "field.edge", Title: "Sharp edges",
-	Demands: "The field 0.1 mm before each sharp edge of an electrode stays below what the medium takes there.",
+	Demands: "The field 0.1 mm before each sharp edge of an electrode, or a fourth of the gap beside it where that is less, stays below what the medium takes there.",
 	Applies: "Every electrode of a computed field with an edge that is drawn sharp, where the field has no bound.",
 	Margin:  "marginal at best: an edge without a radius is judged by an assumed one",
 	Concern: rule.Equipment,
@@ -43,7 +43,7 @@ var junctionSource = rule.Source{Text: "at the negative electrode the junction o
 
 var junction = rule.Rule{
 	ID: "field.junction", Title: "Junctions of metal, insulator and medium",
-	Demands: "The field 0.1 mm from each junction of an electrode with an insulator, in the medium, stays below what the medium takes there.",
+	Demands: "The field 0.1 mm from each junction of an electrode with an insulator, or a fourth of the gap beside it where that is less, in the medium, stays below what the medium takes there.",
 	Applies: "Every place of a computed field where an insulator, the medium and an electrode meet.",
 	Margin:  "in vacuum marginal above 5 kV/mm; marginal at best where the field rises without bound towards the junction",
 	Concern: rule.Equipment,
@@ -94,24 +94,28 @@ func judgeEdges(e *evidence.Evidence, f *build.Arrangement, s *field.Solution, s
 func judgeEdge(e *evidence.Evidence, f *build.Arrangement, x field.Edge, finding rule.Finding) rule.Finding {
 	finding.Subject = f.Name.V + "/" + evidence.EdgeName(x)
 	finding.Remedy = "round the edge, shield the junction, or lower the voltage"
-	at, err := e.AtEdge(f, x, evidence.EdgeDistance)
+	distance, err := e.JudgedAt(f, x)
+	if err != nil {
+		return finding.Lacking(err)
+	}
+	at, err := e.AtEdge(f, x, distance)
 	if err != nil {
 		return finding.Lacking(err)
 	}
 	finding.Under = at.Text()
 	g := e.Filling(f, at.Reading.Body)
-	limit, err := insulation.AtEdge(g, evidence.EdgeDistance)
+	limit, err := insulation.AtEdge(g, distance)
 	if err != nil {
 		return finding.Lacking(lack.Of(err))
 	}
 	finding.Sources = append(rule.Cited(limit.Sources), limits.EdgeSource)
-	finding.Because = fmt.Sprintf("%s at a distance of %s, with which the field goes to the power %.3f; %s", quantity.Text(at.Strength), quantity.Text(evidence.EdgeDistance), at.Exponent, limit.Because)
+	finding.Because = fmt.Sprintf("%s at a distance of %s, with which the field goes to the power %.3f; %s", quantity.Text(at.Strength), quantity.Text(distance), at.Exponent, limit.Because)
 	if at.Polarity == gap.Negative && g.Medium == gap.Vacuum {
 		finding.Because += "; at the negative electrode, which emits"
 	}
 	finding = finding.Assume(taken(e, f)...).Assume(limit.Assumptions...)
 	if at.Exponent < 0 {
-		finding = finding.Assume(f.Name.V + ": sharp edges and joints count as broken or filled to 0.1 mm")
+		finding = finding.Assume(f.Name.V + ": sharp edges and joints count as broken or filled to " + quantity.Text(distance))
 	}
 	margin := limits.DistanceMargin
 	if g.Medium == gap.Vacuum {

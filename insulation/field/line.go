@@ -64,7 +64,7 @@ func (f *Field) lineFrom(from Peak, within bool) (Line, error) {
 	span := f.span()
 	t.longest = func(_ complex128, g complex128) float64 { return linePart * span / cmplx.Abs(g) }
 	t.put(x, u, g)
-	end, err := t.follow(x)
+	end, err := t.follow(start.beside)
 	if end != nil && end.electrode >= 0 {
 		line.Ends = f.names[end.electrode]
 	} else if end != nil && end.kind == interfaces {
@@ -115,10 +115,10 @@ func (t *tracer) direction(x complex128) (d complex128, u float64, g complex128)
 // estimate (Appl. Math. Lett. 2, 321, 1989), until a wall without a way through, the
 // axis across, or far away. It returns the wall.
 func (t *tracer) follow(start complex128) (*wall, error) {
-	x, h := start, firstStep
+	x, h, wide := start, firstStep, t.wide()
 	for range traceSteps {
 		d, _, g := t.direction(x)
-		if d == 0 || apart(x, start) > traceWide || t.done != nil && t.done(x) {
+		if d == 0 || apart(x, start) > wide || t.done != nil && t.done(x) {
 			return nil, nil
 		}
 		longest := t.longest(x, g)

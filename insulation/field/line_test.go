@@ -161,15 +161,16 @@ func TestAlongSurfaces(t *testing.T) {
 }
 
 // A sphere over an earthed plane without end: the line from the sphere ends on the plane,
-// that from the plane on the sphere; both are as long as the gap and bear its voltage.
+// that from the plane on the sphere; both are as long as the gap and bear its voltage,
+// however far the plane is.
 func TestLineToAPlaneWithoutEnd(t *testing.T) {
-	for _, side := range []float64{1, -1} {
+	for _, c := range []struct{ radius, gap, side float64 }{{5, 20, 1}, {5, 20, -1}, {1, 40, 1}} {
 		turn := profile.Left
-		if side < 0 {
+		if c.side < 0 {
 			turn = profile.Right
 		}
-		ball := mustProfile(t, "ball", profile.Stroke{From: mm([2]float64{0, 20 * side})},
-			profile.Stroke{To: mm([2]float64{0, 30 * side}), Centre: mm([2]float64{0, 25 * side}), Turn: turn})
+		at := func(z float64) *profile.Point { return mm([2]float64{0, z * c.side}) }
+		ball := mustProfile(t, "ball", profile.Stroke{From: at(c.gap)}, profile.Stroke{To: at(c.gap + 2*c.radius), Centre: at(c.gap + c.radius), Turn: turn})
 		f := under(t, Arrangement{
 			Electrodes: []Electrode{{"ball", []profile.Profile{ball}}},
 			Boundaries: []Boundary{{Earth, path(t, "floor", 0, 0, 90, 0)}},
@@ -185,9 +186,31 @@ func TestLineToAPlaneWithoutEnd(t *testing.T) {
 					t.Fatalf("the line from %s ends on %q: %v", from, l.Ends, err)
 				}
 				last := l.Points[len(l.Points)-1]
-				within(t, "length", float64(last.Along), 20e-3, 1e-6)
+				within(t, "length", float64(last.Along), c.gap*1e-3, 1e-5)
 				within(t, "voltage", math.Abs(float64(l.Points[0].Potential-last.Potential)), 1000, 1e-6)
 			}
 		}
+	}
+}
+
+// A peak at the rim of the model, where nothing holds its line: thin layers of coaxial
+// dielectrics between natural ends.
+func TestLineFromTheRimOfTheModel(t *testing.T) {
+	ring := func(name string, a, b float64) profile.Profile { return path(t, name, a, 0, b, 0, b, 4, a, 4, a, 0) }
+	f := under(t, Arrangement{
+		Electrodes:  []Electrode{{"in", []profile.Profile{path(t, "in", 3, 0, 3, 4)}}, {"out", []profile.Profile{path(t, "out", 3.2, 0, 3.2, 4)}}},
+		Dielectrics: []Dielectric{{Name: "d1", Permittivity: 1000, Profile: ring("d1", 3, 3.05)}, {Name: "d2", Permittivity: 2, Profile: ring("d2", 3.05, 3.2)}},
+		Boundaries:  []Boundary{{Natural, path(t, "low", 3, 0, 3.2, 0)}, {Natural, path(t, "top", 3, 4, 3.2, 4)}},
+	}, alone2("in", "out"))
+	for body, long := range map[string]float64{"d1": 0.05e-3, "d2": 0.15e-3} {
+		p, err := f.PeakIn(body)
+		if err != nil {
+			t.Fatal(err)
+		}
+		l, err := f.Within(p)
+		if err != nil {
+			t.Fatal(body, err)
+		}
+		within(t, "length in "+body, float64(l.Points[len(l.Points)-1].Along), long, 1e-2)
 	}
 }

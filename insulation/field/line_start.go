@@ -27,7 +27,7 @@ func (f *Field) footOf(p Peak) foot {
 }
 
 // aside is the part of a panel by which a line starts beside the end of its wall.
-const aside = 1e-3
+const aside = 1e-4
 
 // off is the place on its panel from which the line of a peak is followed: the peak itself but,
 // where it lies at the end of a wall that meets others off the axis, a little beside it. A

@@ -67,7 +67,12 @@ func (f *Field) PeakInBeyond(body string, distance quantity.Length) (Peak, error
 		return Peak{}, err
 	}
 	in := func(r int) bool { return r >= 0 && f.regions[r].material == k }
-	all := func(w *wall) bool { return in(w.left) || in(w.right) }
+	// A plane of symmetry runs through the inside of the body: its greatest field lies at
+	// the ends of that, where other walls have it too.
+	all := func(w *wall) bool {
+		symmetry := w.kind == natural && w.curve.radius == 0 && imag(w.curve.along) == 0
+		return (in(w.left) || in(w.right)) && !symmetry
+	}
 	return f.search("the rim of "+body, float64(distance)/f.unit, all, in)
 }
 

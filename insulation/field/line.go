@@ -39,7 +39,22 @@ func (f *Field) Line(from Peak) (Line, error) {
 // through the body that the peak lies in, to where it leaves that body.
 func (f *Field) Within(from Peak) (Line, error) { return f.lineFrom(from, true) }
 
+// lineFrom follows a line; one along the axis that gets nowhere, as where the field
+// vanishes on it, gives way to one beside it.
 func (f *Field) lineFrom(from Peak, within bool) (Line, error) {
+	line, err := f.followed(from, within)
+	if err == nil && line.Ends != "" {
+		return line, nil
+	}
+	if aside, possible := f.besideAxis(from); possible {
+		if other, err := f.followed(aside, within); err == nil && other.Ends != "" {
+			return other, nil
+		}
+	}
+	return line, err
+}
+
+func (f *Field) followed(from Peak, within bool) (Line, error) {
 	if from.face.side < 0 && f.mirror == nil {
 		return Line{}, lack.Range("a field line is drawn from a peak on an electrode or a dielectric")
 	}

@@ -1,6 +1,10 @@
 package field
 
-import "math"
+import (
+	"math"
+
+	"kilovet/hv/quantity"
+)
 
 // foot is where a line starts.
 type foot struct {
@@ -44,6 +48,28 @@ func (f *Field) off(p Peak) float64 {
 		return aside - 1
 	}
 	return p.t
+}
+
+// axisStep is how far beside the axis, in extents of the figure, a line starts that gets
+// nowhere along it.
+const axisStep = 1e-3
+
+// besideAxis is a place beside a peak on the axis, on the same panel or plane.
+func (f *Field) besideAxis(p Peak) (Peak, bool) {
+	if float64(p.At.R) > axisStep*f.unit/10 {
+		return p, false
+	}
+	if p.face.side < 0 {
+		p.At.R = quantity.Length(axisStep * f.unit)
+		return p, true
+	}
+	panel := f.values.sides[p.face.side].panel
+	step := math.Min(2*axisStep/panel.h, 0.1)
+	if p.t > 0 {
+		step = -step
+	}
+	p.t += step
+	return p, true
 }
 
 // wide is how far a line may go from its start: some extents of the figure, and of the

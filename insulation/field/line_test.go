@@ -214,3 +214,26 @@ func TestLineFromTheRimOfTheModel(t *testing.T) {
 		within(t, "length in "+body, float64(l.Points[len(l.Points)-1].Along), long, 1e-2)
 	}
 }
+
+// A ring over a plane without end: on the axis below it the line from the plane runs into
+// a place without a field; the one beside it ends on the ring.
+func TestLineThatGetsNowhereOnTheAxis(t *testing.T) {
+	ring := mustProfile(t, "ring", profile.Stroke{From: mm([2]float64{10, 25})},
+		profile.Stroke{To: mm([2]float64{12, 25}), Centre: mm([2]float64{11, 25}), Turn: profile.Left},
+		profile.Stroke{To: mm([2]float64{10, 25}), Centre: mm([2]float64{11, 25}), Turn: profile.Left})
+	f := under(t, Arrangement{
+		Electrodes: []Electrode{{"ring", []profile.Profile{ring}}},
+		Boundaries: []Boundary{{Earth, path(t, "floor", 0, 0, 90, 0)}},
+	}, map[string]quantity.Voltage{"ring": 1000})
+	p, err := f.Peak(Earthed)
+	if err != nil || p.At.R > 1e-4 {
+		t.Fatal(p.At, err)
+	}
+	l, err := f.Within(p)
+	if err != nil || l.Ends != "ring" {
+		t.Fatalf("it ends on %q: %v", l.Ends, err)
+	}
+	if last := l.Points[len(l.Points)-1]; last.Along < 24e-3 || math.Abs(float64(last.Potential-l.Points[0].Potential)-1000) > 0.01 {
+		t.Errorf("%v long, %v across", last.Along, last.Potential)
+	}
+}

@@ -4,6 +4,7 @@ import (
 	"fmt"
 
 	"kilovet/hv/quantity"
+	"kilovet/ripple/network"
 	"kilovet/rules/evidence"
 	"kilovet/rules/exhibit"
 )
@@ -16,7 +17,10 @@ func loadSteps(c *collector, e *evidence.Evidence) {
 		add(c, "step.removed", "", basis, max(d.After, -d.After), nil)
 		add(c, "step.settling", "", basis, d.Settled, nil)
 	}
-	of(c, "step.applied", "", basis, e.LoadApplied)
+	if d, err := e.LoadApplied(); err == nil {
+		add(c, "step.applied", "", basis, max(d.After, -d.After), nil)
+		add(c, "step.applied_settling", "", basis, d.Settled, nil)
+	}
 	if least, most, err := e.HeldBetween(); err == nil {
 		add(c, "regulation.least", "", "hv.steady", least, nil)
 		add(c, "regulation.most", "", "hv.steady", most, nil)
@@ -34,15 +38,12 @@ func stepTable(e *evidence.Evidence) []exhibit.Table {
 		Columns: []exhibit.Column{{Head: "case"}, {Head: "output before", Unit: "V"}, {Head: "output after", Unit: "V"}, {Head: "95 % of the way after", Unit: "s"}},
 		Note:    "the drive stays where it was",
 	}
-	before, after := max(d.Before, -d.Before), max(d.After, -d.After)
-	row := func(what string, was, is quantity.Voltage, time exhibit.Cell) {
-		t.Rows = append(t.Rows, []exhibit.Cell{exhibit.Words(what), exhibit.Number(was), exhibit.Number(is), time})
+	row := func(what string, d *network.Changed) {
+		t.Rows = append(t.Rows, []exhibit.Cell{exhibit.Words(what), exhibit.Number(max(d.Before, -d.Before)), exhibit.Number(max(d.After, -d.After)), exhibit.Number(d.Settled)})
 	}
-	row("emission stops", before, after, exhibit.Number(d.Settled))
-	cold, err := e.In(evidence.Cold).Potential("output")
-	applied, err2 := e.LoadApplied()
-	if first(err, err2) == nil {
-		row("emission sets in", max(cold, -cold), applied, exhibit.Words("about as long"))
+	row("emission stops", d)
+	if applied, err := e.LoadApplied(); err == nil {
+		row("emission sets in", applied)
 	}
 	if e.Chain().Regulation != nil {
 		t.Note = "no regulation acts: " + t.Note + "; a regulation quicker than the settling holds the set voltage, a slower one lets the output go so far first; the loop itself is not described and not modelled"

@@ -23,6 +23,7 @@ func TestLoadStep(t *testing.T) {
 	within(t, "without emission", figureOf(t, r, "step.removed", ""), 5000, 1e-3)
 	within(t, "with emission", figureOf(t, r, "step.applied", ""), 4900, 1e-3)
 	within(t, "settling", figureOf(t, r, "step.settling", ""), 1e-3*math.Log(20), 0.03)
+	within(t, "settling with emission", figureOf(t, r, "step.applied_settling", ""), 1e-3*math.Log(20), 0.03)
 }
 
 // TestNoStepWithoutEmission: where no gun draws current nothing comes and goes.

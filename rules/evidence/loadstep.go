@@ -2,20 +2,26 @@ package evidence
 
 import (
 	"kilovet/hv/lack"
-	"kilovet/hv/quantity"
 	"kilovet/ripple/network"
 )
 
 // LoadRemoved is what the output does when the emission stops and the drive stays where
 // it was: what the chain shows in an open loop, and under a regulation slower than the
 // multiplier. One that is quicker holds its set voltage; how quick it is, is not described.
-func (e *Evidence) LoadRemoved() (*network.Changed, error) {
-	return remember(e, "load removed", func() (*network.Changed, error) {
-		from, err := e.In(Working).solution()
+func (e *Evidence) LoadRemoved() (*network.Changed, error) { return e.loadGoes(Working, Cold) }
+
+// LoadApplied is what the output does when the emission sets in and the drive stays where
+// it was without: how far it falls before a regulation brings it back.
+func (e *Evidence) LoadApplied() (*network.Changed, error) { return e.loadGoes(Cold, Working) }
+
+// loadGoes is what the output does between two states at the drive of the first.
+func (e *Evidence) loadGoes(before, after State) (*network.Changed, error) {
+	return remember(e, string("load from "+before+" to "+after), func() (*network.Changed, error) {
+		from, err := e.In(before).solution()
 		if err != nil {
 			return nil, err
 		}
-		to, err := e.atDriveOf(Working, Cold)
+		to, err := e.atDriveOf(before, after)
 		if err != nil {
 			return nil, err
 		}
@@ -25,17 +31,6 @@ func (e *Evidence) LoadRemoved() (*network.Changed, error) {
 		}
 		return network.Change(from.Periodic, to.Periodic, network.ChangeOptions{Node: n})
 	})
-}
-
-// LoadApplied is the magnitude of the output with the emission on and the drive where it
-// was without: what it falls to before a regulation brings it back.
-func (e *Evidence) LoadApplied() (quantity.Voltage, error) {
-	p, err := e.atDriveOf(Cold, Working)
-	if err != nil {
-		return 0, err
-	}
-	s, err := p.between("output", "ground")
-	return magnitude(s.Mean), err
 }
 
 // atDriveOf is the periodic state of one state at the drive of another.

@@ -165,6 +165,7 @@ var List = []Declaration{
 
 	{"step.removed", "V", false, "mean at the output when the emission has stopped and the drive stays where it was", ""},
 	{"step.settling", "s", false, "from the end of the emission to 95 % of the way there", ""},
+	{"step.applied_settling", "s", false, "from the onset of the emission to 95 % of the way there", ""},
 	{"step.applied", "V", false, "mean at the output when the emission has set in and the drive stays where it was without", ""},
 	{"regulation.least", "V", false, "least that the sensed node may stand at while its divider reads the set voltage", ""},
 	{"regulation.most", "V", false, "most that the sensed node may stand at while its divider reads the set voltage", ""},

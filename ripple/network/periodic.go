@@ -82,8 +82,13 @@ func (s *shooter) startFrom(p *Periodic) {
 	s.pack(s.q, s.amps, s.root, s.x)
 }
 
-// guessed are the voltages of the capacitors at the negative peak of the guess.
+// guessed are the voltages of the capacitors at the negative peak of the guess, no diode
+// pressed.
 func (s *shooter) guessed() []float64 {
+	if s.pressed != 0 {
+		s.pressed = 0
+		s.balance(s.step)
+	}
 	v := make([]float64, len(s.capacitors))
 	for i := range v {
 		v[i] = s.capacitors[i].volts(s.peaks.u[s.n:], -1, -1)

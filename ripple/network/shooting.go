@@ -48,11 +48,16 @@ func (s *system) measureOfEnergy() float64 {
 }
 
 // guess starts from the charges at the negative peak of the drive, with the diodes
-// pressed to conduct.
+// pressed to conduct. What they pass without being pressed is the measure of their
+// current.
 func (s *shooter) guess(press float64) {
-	s.pressed = press
+	s.pressed = 0
 	s.balance(s.x)
 	s.judge(s.peaks.passed())
+	if press > 0 {
+		s.pressed = press
+		s.balance(s.x)
+	}
 }
 
 // balance is the state at the negative peak of the drive by the balance of charges.

@@ -55,7 +55,7 @@ type attempt struct {
 
 // attempts are the ways to begin a search, in the order in which they are tried.
 func attempts() []attempt {
-	return []attempt{{0, 2, false}, {0, 0, true}, {0.05, 6, false}, {0.5, 10, false}, {5, 100, false}}
+	return []attempt{{0.1, 1, false}, {0, 2, false}, {0, 0, true}, {0.05, 6, false}, {0.5, 10, false}, {5, 100, false}}
 }
 
 // solve searches briskly, and with care where that does not get there.

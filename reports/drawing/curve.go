@@ -46,6 +46,7 @@ func (p *plot) draw() {
 	}
 	p.layOut()
 	p.axes()
+	p.areas()
 	for i, l := range p.Lines {
 		p.polyline(i, l)
 	}
@@ -56,7 +57,9 @@ func (p *plot) draw() {
 		p.mark(i, m)
 	}
 	for i, l := range p.Lines {
-		p.numberLine(i, l)
+		if p.first(i) == i {
+			p.numberLine(i, l)
+		}
 	}
 	p.explain()
 }

@@ -56,8 +56,11 @@ func (p *plot) polyline(i int, l exhibit.Line) {
 	if len(points) == 1 {
 		points = append(points, points[0].plus(0.3, 0))
 	}
-	p.trace(lines(points, false), traceOf(i))
-	sample := func(q at) { p.trace(lines([]at{q, q.plus(sampleWidth, 0)}, false), traceOf(i)) }
+	p.trace(lines(points, false), p.traceOf(i))
+	if p.first(i) != i {
+		return // it is explained already
+	}
+	sample := func(q at) { p.trace(lines([]at{q, q.plus(sampleWidth, 0)}, false), p.traceOf(i)) }
 	p.key = append(p.key, entry{sample: sample, tag: p.lineTag(i), text: l.Name})
 }
 
@@ -66,7 +69,7 @@ func (p *plot) lineTag(i int) string {
 	if len(p.Lines) < 2 {
 		return ""
 	}
-	return strconv.Itoa(i + 1)
+	return strconv.Itoa(p.number(i))
 }
 
 // numberLine puts the number of a line onto it, as far from the other lines as can be,

@@ -177,13 +177,13 @@ func (c *canvas) arc(s vg.PathComp) {
 // FillString writes a text; that it is turned is known from the matrix.
 func (c *canvas) FillString(f font.Face, p vg.Point, text string) {
 	x, y := c.place(p)
-	cut, cutName := regular, ""
+	cut := regular
 	if f.Font.Weight >= xfont.WeightBold {
-		cut, cutName = bold, "B"
+		cut = bold
 	}
 	r, g, b := rgb(c.now.ink)
 	c.out.write(r, g, b)
-	c.out.SetFont(family, cutName, float64(f.Font.Size/vg.Points(1))*c.now.size())
+	c.out.letters(cut, float64(f.Font.Size/vg.Points(1))*c.now.size())
 	text = c.out.fonts.guard(cut, text)
 	angle := -math.Atan2(c.now.b, c.now.a) * 180 / math.Pi
 	if math.Abs(angle) < 1e-9 {

@@ -33,9 +33,7 @@ func (w *flow) inHalves(b page.Halves) {
 	heights := w.heights(half, b.Blocks)
 	second, high := split(heights)
 	w.gap(3)
-	if w.y+min(high, leastHalves) > w.bottom && !w.fresh() {
-		w.turn()
-	}
+	w.room(min(high, leastHalves))
 	whole := w.y+high <= w.bottom
 	w.halves = &halves{whole: w.area, from: w.y, left: sum(heights), broken: !whole || second == 0}
 	w.area = half

@@ -24,6 +24,20 @@ type painter struct {
 	links map[string]int
 	err   error // what a picture could not draw
 	ink   [3]int
+	cut   string  // of the type that is set
+	size  float64 // in points
+}
+
+// letters sets the type, once for all that has it.
+func (p *painter) letters(c face, size float64) {
+	cut := ""
+	if c == bold {
+		cut = "B"
+	}
+	if p.cut != cut || math.Abs(p.size-size) > 0 {
+		p.cut, p.size = cut, size
+		p.SetFont(family, cut, size)
+	}
 }
 
 // write sets the colour of text, once for all that has it.
@@ -79,15 +93,11 @@ func paint(out *painter, s *sheet) error {
 func (w written) numbers() []float64 { return []float64{w.x, w.y, w.style.size} }
 
 func (w written) draw(out *painter) {
-	cut := ""
-	if w.style.face == bold {
-		cut = "B"
-	}
 	ink := 0
 	if w.white {
 		ink = 255
 	}
-	out.SetFont(family, cut, w.style.size)
+	out.letters(w.style.face, w.style.size)
 	out.write(ink, ink, ink)
 	out.Text(w.x, w.y, w.text)
 }

@@ -108,7 +108,7 @@ type bookmark struct {
 func (b bookmark) numbers() []float64 { return []float64{b.y} }
 
 func (b bookmark) draw(out *painter) {
-	out.SetFont(family, "", body.size) // in whose code the title is written
+	out.letters(regular, body.size) // in whose code the title is written
 	out.Bookmark(b.title, 0, b.y)
 }
 

@@ -52,7 +52,6 @@ func RenderOn(p Paper, d *page.Document) ([]byte, error) {
 // finished is the bytes of the file, compressed, and without moments that nobody named.
 func finished(out *painter, block page.TitleBlock) ([]byte, error) {
 	var plain bytes.Buffer
-	plain.Grow(2 << 20)
 	if err := out.Output(&plain); err != nil {
 		return nil, fmt.Errorf("pdf: %w", err)
 	}

@@ -24,7 +24,7 @@ var rests = map[string][]string{
 	"gun.emission_law":        {"curve gun.emission", "figure gun.emission_law", "figure gun.emission"},
 	"gun.emission_limit":      {"curve gun.emission", "figure gun.richardson_limit"},
 	"gun.regulation":          {"table gun.sensitivities", "figure gun.loop_gain"},
-	"gun.cutoff":              {"table gun.operating_point", "figure gun.cutoff"},
+	"gun.cutoff":              {"table gun.cutoffs", "table gun.operating_point", "figure gun.cutoff"},
 	"vacuum.permit":           {"curve vacuum.paschen", "table vacuum.pump_down", "figure vacuum.band_from"},
 	"spacing.described":       {"table spacing.two_ways"},
 	"feed.voltage":            {"figure potential cathode"},
@@ -34,6 +34,7 @@ var rests = map[string][]string{
 	"discharge.waiting_time":  {"table energy.nodes", "figure stored.discharge_time"},
 	"discharge.one_open":      {"table energy.one_open"},
 	"discharge.residue":       {"figure stored.residue"},
+	"discharge.recharge":      {"table energy.recharge"},
 	"bleeder.redundancy":      {"table energy.one_open"},
 	"rod.there":               {"table energy.nodes"},
 	"rod.voltage":             {"table energy.rod"},
@@ -45,6 +46,7 @@ var rests = map[string][]string{
 	"fault.computed":          {"table faults.outcomes"},
 	"fault.rating":            {"table faults.outcomes"},
 	"fault.spacing":           {"table faults.outcomes", "table spacing.two_ways"},
+	"series.arc_power":        {"table chain.arc", "table faults.outcomes"},
 	"fault.touch":             {"table faults.outcomes", "table energy.limits"},
 }
 

@@ -186,18 +186,18 @@ func bodyTable(e *evidence.Evidence) []exhibit.Table {
 	}
 	t := exhibit.Table{
 		ID: "energy.body", Subject: node, Chapter: exhibit.Energy, Title: "What a body would take at " + node, Basis: "discharge of a capacitance through a resistance",
-		Columns: []exhibit.Column{{Head: "body"}, {Head: "resistance", Unit: "Ω"}, {Head: "peak current", Unit: "A"}, {Head: "lasting", Unit: "s"}, {Head: "charge", Unit: "C"}, {Head: "energy", Unit: "J"}, {Head: "zone"}, {Head: "source"}},
+		Columns: []exhibit.Column{{Head: "body"}, {Head: "resistance", Unit: "Ω"}, {Head: "peak current", Unit: "A"}, {Head: "lasting", Unit: "s"}, {Head: "charge", Unit: "C"}, {Head: "energy", Unit: "J"}, {Head: "source"}, {Head: "zone"}},
 		Note:    under(e) + "Information, never a permission: no current through a body is permitted by it. Lasting is the duration 3 R C that counts. Zones: " + touch.ZoneSource + ".",
 	}
 	for _, b := range touch.Bodies() {
 		if s, err := e.Shock(node, b); err == nil {
 			t.Rows = append(t.Rows, []exhibit.Cell{exhibit.Words(b.Name), exhibit.Number(b.Resistance), exhibit.Number(s.Peak), exhibit.Number(s.Duration),
-				exhibit.Number(s.Charge), exhibit.Number(s.Energy), exhibit.Words("an impulse: curves not seen"), exhibit.Words(b.Source + " (" + b.Mark + ")")})
+				exhibit.Number(s.Charge), exhibit.Number(s.Energy), exhibit.Words(b.Source + " (" + b.Mark + ")"), exhibit.Words("an impulse: curves not seen")})
 		}
 	}
 	if i, err := e.TouchCurrent(node); err == nil {
 		t.Rows = append(t.Rows, []exhibit.Cell{exhibit.Words("with the drive on"), exhibit.Number(quantity.Resistance(2e3)), exhibit.Number(i), exhibit.Words("as long as touched"),
-			exhibit.Words("–"), exhibit.Words("–"), exhibit.Words(touch.ZoneOfDC(i)), exhibit.Words("the steady state with 2 kΩ at the node")})
+			exhibit.Words("–"), exhibit.Words("–"), exhibit.Words("the steady state with 2 kΩ at the node"), exhibit.Words(touch.ZoneOfDC(i))})
 	}
 	return table(t)
 }

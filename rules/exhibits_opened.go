@@ -11,7 +11,7 @@ import (
 func openedTable(e *evidence.Evidence) []exhibit.Table {
 	t := exhibit.Table{
 		ID: "energy.one_open", Chapter: exhibit.Energy, Title: "Discharge with one part open", Basis: "decay of the whole network, each part open in turn",
-		Columns: []exhibit.Column{{Head: "open"}, {Head: "which of it"}, {Head: "last node"}, {Head: "to 60 V", Unit: "s"}, {Head: "the meter then shows", Unit: "V"}},
+		Columns: []exhibit.Column{{Head: "open"}, {Head: "last node"}, {Head: "to 60 V", Unit: "s"}, {Head: "the meter then shows", Unit: "V"}, {Head: "which of it"}},
 		Note:    under(e) + "Elements in series open alike: any one of them opens its string. What the meter shows is that of the sensed node, when the last node is at 60 V, or in the end where one stays. A meter that shows nothing does not prove that nothing is there.",
 	}
 	all, err := e.OneOpen()
@@ -19,7 +19,7 @@ func openedTable(e *evidence.Evidence) []exhibit.Table {
 		return nil
 	}
 	for _, o := range all {
-		t.Rows = append(t.Rows, []exhibit.Cell{exhibit.Words(o.Part), exhibit.Words(which(e, o.Part)), exhibit.Words(o.Worst.Node), lasting(o.Worst, nil), shown(e, o)})
+		t.Rows = append(t.Rows, []exhibit.Cell{exhibit.Words(o.Part), exhibit.Words(o.Worst.Node), lasting(o.Worst, nil), shown(e, o), exhibit.Words(which(e, o.Part))})
 	}
 	return table(t)
 }

@@ -75,9 +75,16 @@ func narrower(g gap.Gap, of law) (gap.Answer[quantity.Voltage], error) {
 	return nearest(g, 1/stepOfGaps, "stands no less", of)
 }
 
-// wider is the answer of the narrowest wider gap that a law answers.
+// wider is the answer of the narrowest wider gap that a law answers with more than a lower
+// bound.
 func wider(g gap.Gap, of law) (gap.Answer[quantity.Voltage], error) {
-	return nearest(g, stepOfGaps, "stands no more", of)
+	return nearest(g, stepOfGaps, "stands no more", func(g gap.Gap) (gap.Answer[quantity.Voltage], error) {
+		a, err := of(g)
+		if err == nil && a.AtLeast {
+			return gap.Answer[quantity.Voltage]{}, lack.Range("only a lower bound is known")
+		}
+		return a, err
+	})
 }
 
 const (

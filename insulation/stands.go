@@ -178,20 +178,36 @@ func needles(g gap.Gap, s gas.State) (gap.Answer[quantity.Voltage], error) {
 
 // crossing is the larger of onset and what sharp electrodes stand: a discharge that
 // starts earlier than it can cross stays a corona. A radius too fine for an onset is
-// sharp.
+// sharp. Where the law of sharp electrodes ends before the gap does, both are lower bounds.
 func crossing(s gas.State, l shape.Line, law func(gas.State, quantity.Length) (gap.Answer[quantity.Voltage], error), starts gap.Result[quantity.Voltage]) (gap.Answer[quantity.Voltage], error) {
+	fine := quantity.Length(s.Density())*l.Radius() < gas.FinestRadius
+	if starts.Lack != nil && !fine {
+		return gap.Answer[quantity.Voltage]{}, starts.Lack
+	}
 	sharp, err := law(s, l.Gap())
-	if err != nil {
+	if err != nil && starts.Lack == nil {
+		sharp = narrowest(s, l.Gap(), law)
+		starts.AtLeast = true
+	} else if err != nil {
 		return gap.Answer[quantity.Voltage]{}, err
 	}
-	fine := quantity.Length(s.Density())*l.Radius() < gas.FinestRadius
-	switch {
-	case starts.Lack != nil && !fine:
-		return gap.Answer[quantity.Voltage]{}, starts.Lack
-	case starts.Lack != nil || sharp.Value > starts.Value:
+	if starts.Lack != nil || sharp.Value > starts.Value {
 		return sharp, nil
 	}
 	return starts.Answer, nil
+}
+
+// narrowest is what sharp electrodes stand where their law ends before a gap does, a lower
+// bound; nothing where it does not begin.
+func narrowest(s gas.State, d quantity.Length, law func(gas.State, quantity.Length) (gap.Answer[quantity.Voltage], error)) gap.Answer[quantity.Voltage] {
+	for end := d; end > d/1000; end /= 1.02 {
+		if a, err := law(s, end); err == nil {
+			a.AtLeast = true
+			a.Because += "; as over " + quantity.Text(end) + ", where the law ends: this gap stands no less"
+			return a
+		}
+	}
+	return gap.Answer[quantity.Voltage]{}
 }
 
 // twoSided says whether both electrodes of a shape are curved alike.

@@ -51,7 +51,18 @@ func Find(name string) (Material, error) {
 			return m, nil
 		}
 	}
-	return Material{}, lack.Range("no strength of %s is known here", name)
+	return Material{}, lack.Range("no strength of %s is known here: give spacing.strength and spacing.tested_thickness of its maker, or one that is known: %s", name, strings.Join(known(), ", "))
+}
+
+// known are the names of the materials whose strength is known.
+func known() []string {
+	var all []string
+	for _, m := range materials {
+		if m.Strength.Least > 0 {
+			all = append(all, m.Name)
+		}
+	}
+	return all
 }
 
 // steepest is the fastest fall of strength with thickness among the known materials, for

@@ -82,6 +82,9 @@ func gapOf(g gap.Gap, wanted quantity.Length) (quantity.Length, error) {
 	}, func() error {
 		return lack.Range("even %s, the closest gap of the law, stands more", quantity.Text(closest))
 	}, func() error {
+		if p := g.TruePressure(); p > 0 && !quantity.AtLeast(widest, longest) {
+			return lack.Range("at %s the laws of vacuum end at a gap of %s, which stands less: pump lower", quantity.Text(p), quantity.Text(widest))
+		}
 		return lack.Range("even %s between these electrodes stands less: they are too sharp", quantity.Text(widest))
 	})
 	return quantity.Length(x), err

@@ -103,3 +103,14 @@ func TestALowerBoundIsNoBreakdown(t *testing.T) {
 		t.Error(f.Because)
 	}
 }
+
+// A sphere of 5 mm 0.7 m from a plane stands at least what positive streamers need over half
+// a metre, 225 kV (4.5 kV/cm, read); more than that is unassessed, not failed.
+func TestPastHalfAMetreOnlyTheLowerBoundIsKnown(t *testing.T) {
+	for kilovolts, want := range map[float64]rule.Verdict{100: rule.Meets, 150: rule.Marginal, 300: rule.Unassessed} {
+		f := findings(t, site(0)+fmt.Sprintf("[[spacing]]\nname = \"g\"\nvoltage = \"%g kV\"\nclearance = \"700 mm\"\nmedium = \"air\"\ntemperature = \"20 degC\"\nshape = { kind = \"sphere-plane\", radius = \"5 mm\" }\n", kilovolts))["spacing.breakdown | g"]
+		if f.Verdict != want || !strings.Contains(f.Because, "at least 225 kV") {
+			t.Errorf("%g kV: %s: %s", kilovolts, f.Verdict, f.Because)
+		}
+	}
+}

@@ -46,6 +46,7 @@ func chapters(pen *drawing.Pen, r *rules.Review) []chapter {
 	for _, c := range digest.Chapters(r) {
 		out := chapter{ID: "chapter-" + string(c.Of), Title: c.Title, Figures: figureTables(string(c.Of), c.Figures)}
 		for i, given := range c.Curves {
+			given = digest.Thinned(given)
 			id := fmt.Sprintf("curve-%s-%d", c.Of, i+1)
 			picture := pen.Curve(given, curveWidth).SVG(id+"-drawing", titled(given.Title, given.Subject), digest.CurveWords(given))
 			out.Curves = append(out.Curves, curve{id, titled(given.Title, given.Subject), clean(given.Note), clean(given.Basis), template.HTML(picture)})

@@ -34,6 +34,9 @@ func newWriter(r *rules.Review) *writer {
 		n.anchors[about{f.Rule, f.Subject}] = fmt.Sprintf("finding-%d", i+1)
 	}
 	for _, c := range n.parts {
+		for i := range c.Curves {
+			c.Curves[i] = digest.Thinned(c.Curves[i])
+		}
 		n.lay(c, layFigures(c))
 	}
 	n.number()

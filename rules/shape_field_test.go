@@ -7,6 +7,7 @@ import (
 	"testing"
 
 	"kilovet/rules"
+	"kilovet/rules/rule"
 )
 
 // gapOf is a spacing of 10 kV over 20 mm of air with a shape.
@@ -78,6 +79,19 @@ func TestRodsByTheirFields(t *testing.T) {
 			t.Errorf("%s: %g, want %g kV/mm", gap, got, want)
 		}
 		bothShown(t, r, "rounded edge, a straight edge")
+	}
+}
+
+// Where a wall stands is taken for granted unless it is described: then no verdict about
+// the gap is better than marginal.
+func TestWallsOfRodsAreAssumed(t *testing.T) {
+	const rod = `kind = "rounded edge", edge_radius = "20 mm", body_radius = "20 mm"`
+	for more, want := range map[string]rule.Verdict{"": rule.Marginal, `, wall_radius = "220 mm"`: rule.Meets} {
+		for _, f := range reviewed(t, gapOf(rod+more)).Findings {
+			if f.Rule == "spacing.corona" && f.Verdict != want {
+				t.Errorf("%q: %s, want %s: %v", more, f.Verdict, want, f.Assumptions)
+			}
+		}
 	}
 }
 

@@ -17,6 +17,8 @@ type Arrangement struct {
 	From string
 	// Of is the name of what it was built from.
 	Of string
+	// Ideal is what a closed form of the same shape takes for granted too; may be empty.
+	Ideal string
 	// Assumed is what building it took for granted.
 	Assumed []string
 	// Dimensions are those it was built from.

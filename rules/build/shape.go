@@ -61,7 +61,7 @@ func (b shapeBuilder) arrangement(d shapeSizes) *Arrangement {
 	}
 	if a.Err = b.check(d); a.Err == nil {
 		draw(p, a, d)
-		a.Assumed = append(a.Assumed, b.Name.V+": insulators beside the gap and what else is near are left out")
+		a.Ideal = b.Name.V + ": insulators beside the gap and what else is near are left out"
 	}
 	return a
 }

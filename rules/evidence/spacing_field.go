@@ -2,6 +2,7 @@ package evidence
 
 import (
 	"fmt"
+	"slices"
 
 	"kilovet/hv/chain"
 	"kilovet/hv/lack"
@@ -41,8 +42,11 @@ func (e *Evidence) byField(s *chain.Spacing, x *Spacing) {
 		Value:   c.Line.Peak(x.Voltages.Peak),
 		Because: fmt.Sprintf("computed field of %s, utilisation factor %.3g", f.Name.V, float64(c.Line.Utilisation())),
 		Sources: []gap.Source{{Text: "computed field of the described arrangement", Mark: gap.Derived, Governs: true}},
-		Shown:   besides(closed.FieldPeak, shape),
+		Shown:   besides(closed.FieldPeak, shape), Assumptions: f.Assumed,
 	}}
+	by.Onset.Assumptions = slices.Concat(by.Onset.Assumptions, f.Assumed)
+	by.FieldLimit.Assumptions = slices.Concat(by.FieldLimit.Assumptions, f.Assumed)
+	by.Breakdown.Assumptions = slices.Concat(by.Breakdown.Assumptions, f.Assumed)
 	by.Onset.Shown = append(by.Onset.Shown, besides(closed.Onset, shape)...)
 	by.FieldLimit.Shown = append(by.FieldLimit.Shown, besides(closed.FieldLimit, shape)...)
 	by.Breakdown.Shown = append(by.Breakdown.Shown, besides(closed.Breakdown, shape)...)

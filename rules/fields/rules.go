@@ -60,6 +60,9 @@ func drawable(e *evidence.Evidence) (all []*build.Arrangement) {
 // direct voltage settles in it.
 func taken(e *evidence.Evidence, f *build.Arrangement) []string {
 	all := append([]string(nil), f.Assumed...)
+	if f.Ideal != "" {
+		all = append(all, f.Ideal)
+	}
 	if !f.Medium.Set() {
 		all = append(all, "what fills "+f.Name.V+" is not given and taken as vacuum")
 	}

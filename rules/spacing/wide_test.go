@@ -12,7 +12,7 @@ import (
 	"kilovet/rules/rule"
 )
 
-// any is a spacing of any medium and shape over the whole range of sizes that people try.
+// anyGap is a spacing of any medium and shape over the whole range of sizes that people try.
 type anyGap struct {
 	medium, material, surface, shape, finish string
 	altitude, voltage, clearance, creepage   float64 // m, V, mm

@@ -172,8 +172,12 @@ const longLadder = 8
 // Available is the touch current of a node, for print: not of the nodes within a long
 // ladder.
 func (e *Evidence) Available(node string) (quantity.Current, error) {
-	if n := e.chain.Multiplier.Stages.V; n > longLadder && e.within(node, n) {
+	n := e.chain.Multiplier.Stages.V
+	if n > longLadder && e.within(node, n) {
 		return 0, lack.Failed("not computed within a ladder of more than %d stages: see its ends", longLadder)
+	}
+	if e.Leaves("faults") && e.within(node, n) {
+		return 0, lack.Failed("left out with the faults")
 	}
 	return e.TouchCurrent(node)
 }

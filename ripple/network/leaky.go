@@ -5,6 +5,7 @@ import (
 	"math"
 
 	"kilovet/hv/circuit"
+	"kilovet/hv/lack"
 	"kilovet/hv/quantity"
 )
 
@@ -28,29 +29,46 @@ const (
 type reacher struct {
 	failed string // part that leaks what it leaks
 	dead   bool   // nothing feeds the loads: parts of the ladder are cut off
+	spent  Work
+}
+
+// allowance is the number of steps that all searches for one circuit may take together:
+// twice what an ordinary one takes and more.
+func (r *reacher) allowance(c *circuit.Circuit) int { return 6000 + 100*len(c.Elements) }
+
+// steady is the steady state within what is left of the allowance.
+func (r *reacher) steady(c *circuit.Circuit, o Options) (*Periodic, error) {
+	o.Most = r.allowance(c) - r.spent.Steps
+	if o.Most <= 0 {
+		return nil, lack.Failed("the periodic state was not reached in %d periods", r.spent.Periods)
+	}
+	o.work = &r.spent
+	return Steady(c, o)
 }
 
 // reach finds the steady state, and where it is not reached, or is known to be far, that
 // with more leakage of the diodes, if it no longer rests on how much.
-func (r reacher) reach(c *circuit.Circuit, o Options) (*Periodic, error) {
+func (r *reacher) reach(c *circuit.Circuit, o Options) (*Periodic, error) {
+	bare := Options{Frequency: o.Frequency}
 	if !r.dead {
-		p, err := Steady(c, o)
+		p, err := r.steady(c, o)
 		if err != nil && o.From != nil {
-			p, err = Steady(c, Options{Frequency: o.Frequency})
+			p, err = r.steady(c, bare)
 		}
 		if err == nil {
 			return p, nil
 		}
 	}
-	if p := r.lend(c, o); p != nil {
+	r.spent = Work{} // as much again
+	if p := r.lend(c, bare); p != nil {
 		return p, nil
 	}
-	return Steady(c, Options{Frequency: o.Frequency})
+	return r.steady(c, bare)
 }
 
 // lend finds the state with leakage lent to the diodes, where two amounts of it give the
 // same.
-func (r reacher) lend(c *circuit.Circuit, o Options) *Periodic {
+func (r *reacher) lend(c *circuit.Circuit, o Options) *Periodic {
 	unit := leakUnit(c, o)
 	var last *Periodic
 	before := 0.0
@@ -59,7 +77,7 @@ func (r reacher) lend(c *circuit.Circuit, o Options) *Periodic {
 		parts, agreed = parts[cut:], agreedCut
 	}
 	for _, part := range parts {
-		next, err := Steady(r.leaking(c, part*unit), Options{Frequency: o.Frequency})
+		next, err := r.steady(r.leaking(c, part*unit), o)
 		if err != nil {
 			continue
 		}
@@ -76,7 +94,7 @@ func (r reacher) lend(c *circuit.Circuit, o Options) *Periodic {
 
 // leaking is the circuit with diodes that leak no less than a conductance, but for the one
 // that failed.
-func (r reacher) leaking(c *circuit.Circuit, least float64) *circuit.Circuit {
+func (r *reacher) leaking(c *circuit.Circuit, least float64) *circuit.Circuit {
 	return c.Each(func(e *circuit.Element) bool {
 		if e.Kind == circuit.Diode && e.Name != r.failed {
 			e.Rectifier.Leakage = max(e.Rectifier.Leakage, least)

@@ -15,6 +15,11 @@ type Options struct {
 	Frequency quantity.Frequency
 	// From is a periodic state of a similar circuit to start from.
 	From *Periodic
+	// Most is the number of steps after which the search is given up; zero serves any
+	// ordinary circuit several times over.
+	Most int
+
+	work *Work // adds up what searches cost, given up or not
 }
 
 // idle is the frequency at which a circuit without an alternating source is walked;
@@ -32,7 +37,14 @@ func Steady(c *circuit.Circuit, o Options) (*Periodic, error) {
 	if err != nil {
 		return nil, err
 	}
-	return newSearch(newShooter(s)).solve(o.From)
+	h := newSearch(newShooter(s))
+	if o.Most > 0 {
+		h.most = o.Most
+	}
+	if o.work != nil {
+		defer func() { o.work.add(h.pace.work) }()
+	}
+	return h.solve(o.From)
 }
 
 // compile sets up the equations of a circuit.

@@ -28,7 +28,7 @@ const screen = 23
 // How much of each list the first screen shows.
 const (
 	mostSummary  = 8
-	fewSummary   = 3 // where there is much to list
+	fewSummary   = 4 // where there is much to list
 	mostSubjects = 3
 	mostMissing  = 6
 	leastList    = 4 // lines of what was found, whatever the rest takes
@@ -56,10 +56,12 @@ func first(w *writer, r *rules.Review, o Options) {
 	ending(end, r)
 	room := func(begin *writer) int { return screen - begin.height() - end.height() - 2 }
 	begin := newWriter(o)
-	beginning(begin, r, o.Note, mostSummary)
-	if len(entries) > room(begin) && !o.All {
+	for most := min(mostSummary, max(fewSummary, len(r.Summary))); ; most-- {
 		begin = newWriter(o)
-		beginning(begin, r, o.Note, fewSummary)
+		beginning(begin, r, o.Note, most)
+		if o.All || most <= fewSummary || len(entries) <= room(begin) {
+			break
+		}
 	}
 	w.out.Write(begin.out.Bytes())
 	list(w, entries, max(leastList, room(begin)))

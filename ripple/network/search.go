@@ -59,7 +59,7 @@ func (s *search) converge(g grade) error {
 		size := norm(s.r)
 		stalled := size > 0.3*last
 		last = size
-		small := 1e-8
+		small := 1e-9
 		if stalled { // what is left is rounding, which a mode that only leakage ties down makes much of
 			small = 1e-5
 		}
@@ -184,14 +184,14 @@ func (s *search) newton() {
 	}
 }
 
-// balanced reports whether the charges come back to 1e-7 of what the diodes pass,
+// balanced reports whether the charges come back to 1e-8 of what the diodes pass,
 // or, where rounding keeps them from coming any closer, to 3e-7.
 func (s *shooter) balanced(stalled bool) bool {
 	worst, most := s.largestCharge(s.r), s.largestCharge(s.x)
 	if stalled {
 		return worst <= math.Max(3e-7*s.pace.passed, 1e-11*most)
 	}
-	return worst <= math.Max(1e-7*s.pace.passed, 1e-13*most)
+	return worst <= math.Max(1e-8*s.pace.passed, 1e-13*most)
 }
 
 // largestCharge is the largest charge in a state or a change of it.

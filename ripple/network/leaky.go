@@ -33,8 +33,8 @@ type reacher struct {
 }
 
 // allowance is the number of steps that all searches for one circuit may take together:
-// four times what an ordinary one takes, more.
-func (r *reacher) allowance(c *circuit.Circuit) int { return 12000 + 200*len(c.Elements) }
+// several times what an ordinary one takes, more.
+func (r *reacher) allowance(c *circuit.Circuit) int { return 20000 + 200*len(c.Elements) }
 
 // steady is the steady state within what is left of the allowance.
 func (r *reacher) steady(c *circuit.Circuit, o Options) (*Periodic, error) {

@@ -37,7 +37,7 @@ func Seek(o HoldOptions) (quantity.Voltage, *Periodic, error) {
 	if err != nil {
 		return 0, nil, err
 	}
-	return o.together(2000 + 100*len(c.Elements))
+	return o.together(1500 + 30*len(c.Elements))
 }
 
 // together seeks drive and state at once, in at most a number of steps where that is

@@ -49,8 +49,23 @@ func (f Fault) Condition() evidence.Condition {
 // Change is the fault as a change of the circuit.
 func (f Fault) Change() evidence.Fault {
 	return evidence.Fault{Name: f.Name, Edit: f.edit, Loop: f.loop, Part: f.Part, Gone: f.whole,
-		Strains: f.Kind != Value && strings.HasPrefix(f.Part, "multiplier"),
+		Strains: f.strains(),
 		Cuts:    strings.HasPrefix(f.Part, "multiplier.diode") && f.Kind != Shorted}
+}
+
+// strains reports whether the regulation is likely to end at its limit: with a fault of the
+// ladder, with what pulls the output to ground, and with a divider that reads nothing.
+func (f Fault) strains() bool {
+	on := func(part string) bool { return strings.HasPrefix(f.Part, part) }
+	switch {
+	case f.Kind == Value:
+		return false
+	case f.Kind == Arc, on("multiplier"), on("earth link"):
+		return true
+	case on("divider"):
+		return f.whole
+	}
+	return f.whole && f.Kind == Shorted && (on("bleeder") || on("cable") || on("heater.feed") || strings.HasSuffix(f.Part, ".capacitor"))
 }
 
 // Of lists every fault and every error of assembly of a chain, in the order of its

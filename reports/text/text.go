@@ -28,7 +28,8 @@ const screen = 23
 // How much of each list the first screen shows.
 const (
 	mostSummary  = 8
-	fewSummary   = 4 // where there is much to list
+	fewSummary   = 4 // where much stands against switching on
+	someSummary  = 6 // where nothing does
 	mostSubjects = 3
 	mostMissing  = 6
 	leastList    = 4 // lines of what was found, whatever the rest takes
@@ -55,11 +56,15 @@ func first(w *writer, r *rules.Review, o Options) {
 	end := newWriter(o)
 	ending(end, r)
 	room := func(begin *writer) int { return screen - begin.height() - end.height() - 2 }
+	few := someSummary
+	if digest.Blocks(r.Verdict) {
+		few = fewSummary
+	}
 	begin := newWriter(o)
-	for most := min(mostSummary, max(fewSummary, len(r.Summary))); ; most-- {
+	for most := min(mostSummary, max(few, len(r.Summary))); ; most-- {
 		begin = newWriter(o)
 		beginning(begin, r, o.Note, most)
-		if o.All || most <= fewSummary || len(entries) <= room(begin) {
+		if o.All || most <= few || len(entries) <= room(begin) {
 			break
 		}
 	}

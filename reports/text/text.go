@@ -60,7 +60,7 @@ func first(w *writer, r *rules.Review, o Options) {
 	if digest.Blocks(r.Verdict) {
 		few = fewSummary
 	}
-	begin := newWriter(o)
+	var begin *writer
 	for most := min(mostSummary, max(few, len(r.Summary))); ; most-- {
 		begin = newWriter(o)
 		beginning(begin, r, o.Note, most)

@@ -56,11 +56,14 @@ func (s *solver) adapt(panels []*panel) (coarse, fine *solved, err error) {
 		}
 		wants := s.wants(fine)
 		now = s.peaks(fine)
-		limit := 1.0
+		limit := s.aim
 		switch largest := most(wants); {
 		case largest == 0: // nothing to resolve, as in a uniform field
 			return fine, fine, fine.checkBounds()
-		case largest <= 1:
+		case largest <= s.aim:
+			if s.aim > float64(Fine) {
+				return fine, fine, fine.checkBounds() // nobody asks by how much it is off
+			}
 			if coarse != nil && settled(before, now) {
 				return coarse, fine, fine.checkBounds()
 			}

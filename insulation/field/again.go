@@ -75,10 +75,10 @@ func (s *Solution) copied() *Arrangement {
 // the integrals that were done for it.
 func (s *Solution) again(m *model) (*Solution, error) {
 	if !s.samePlane(m) {
-		return m.solution()
+		return m.solution(Aim(s.aim))
 	}
 	next := newSolver(m)
-	next.blocks, next.made = maps.Clone(s.blocks), s.made
+	next.blocks, next.made, next.aim = maps.Clone(s.blocks), s.made, s.aim
 	return next.solution(s.coarse.panels)
 }
 

@@ -13,7 +13,10 @@ const perfect = 1e-9
 // have had time to settle: the resistivities decide, not the permittivities. All
 // dielectrics need a resistivity; the medium counts as a perfect insulator unless it
 // has one. A body that conducts but touches no electrode has no potential of its own.
-func SolveResistive(a Arrangement) (*Solution, error) {
+func SolveResistive(a Arrangement) (*Solution, error) { return Fine.SolveResistive(a) }
+
+// SolveResistive is SolveResistive with that aim.
+func (aim Aim) SolveResistive(a Arrangement) (*Solution, error) {
 	if err := leaks(&a); err != nil {
 		return nil, err
 	}
@@ -24,7 +27,7 @@ func SolveResistive(a Arrangement) (*Solution, error) {
 	if err := m.held(); err != nil {
 		return nil, err
 	}
-	return m.solution()
+	return m.solution(aim)
 }
 
 // leaks reports the resistivities that are wanting, or are none.

@@ -46,12 +46,13 @@ type solver struct {
 	layer
 	constants []float64 // of each region: permittivity, or conductivity
 	made      int       // panels so far
+	aim       float64   // times the ordinary errors are allowed
 	blocks    map[[2]int]*block
 	work      Work
 }
 
 func newSolver(m *model) *solver {
-	s := &solver{model: m, constants: make([]float64, len(m.regions)), blocks: map[[2]int]*block{}}
+	s := &solver{model: m, aim: 1, constants: make([]float64, len(m.regions)), blocks: map[[2]int]*block{}}
 	for i, r := range m.regions {
 		s.constants[i] = r.constant
 	}

@@ -93,10 +93,10 @@ type tried struct {
 func (e *Evidence) answer(f *build.Arrangement, d build.Dimension, weak Weak, asked float64) Answer {
 	a := Answer{Dimension: d}
 	v := d.Value * littleStep
-	t, err := e.try(d, v, weak)
+	t, err := e.try(d, v, weak, field.Fine)
 	if err != nil {
 		v = d.Value / littleStep
-		if t, err = e.try(d, v, weak); err != nil {
+		if t, err = e.try(d, v, weak, field.Fine); err != nil {
 			a.Err = err
 			return a
 		}
@@ -124,7 +124,7 @@ func (e *Evidence) search(d build.Dimension, weak Weak, asked, power float64) (q
 		if !(next < resizedMost*float64(d.Value) && next > float64(d.Value)/resizedMost) {
 			return 0, lack.Range("not even a fourth or four times as much is enough")
 		}
-		t, err := e.try(d, quantity.Length(next), weak)
+		t, err := e.try(d, quantity.Length(next), weak, field.Rough)
 		if err != nil {
 			return 0, err
 		}
@@ -140,11 +140,11 @@ func (e *Evidence) search(d build.Dimension, weak Weak, asked, power float64) (q
 }
 
 // try solves an arrangement with another dimension under the same voltages.
-func (e *Evidence) try(d build.Dimension, v quantity.Length, weak Weak) (tried, error) {
+func (e *Evidence) try(d build.Dimension, v quantity.Length, weak Weak, aim field.Aim) (tried, error) {
 	f := d.With(v)
-	by := field.Solve
+	by := aim.Solve
 	if weak.Settled {
-		by = field.SolveResistive
+		by = aim.SolveResistive
 	}
 	s, err := solveBy(f, by)
 	if err != nil {

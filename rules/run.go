@@ -5,6 +5,7 @@ import (
 
 	"kilovet/hv/chain"
 	"kilovet/hv/document"
+	"kilovet/hv/parallel"
 	"kilovet/hv/trace"
 	"kilovet/rules/diagram"
 	"kilovet/rules/evidence"
@@ -46,7 +47,7 @@ func RunUnder(c *chain.Chain, inputs []Input, program Program, beside Beside) (*
 	e := evidence.New(c).Recorded(beside.Ripple).Without(beside.Without...).Telling(beside.Progress)
 	r := &Review{Program: program, Inputs: inputs, Heading: heading(c), Deference: deference}
 	var shown []exhibit.Table
-	together(
+	parallel.Do(
 		func() { r.judge(e) },
 		func() { r.Figures = figures(e) },
 		func() { r.Curves = curves(e) },

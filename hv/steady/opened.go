@@ -1,10 +1,8 @@
 package steady
 
 import (
-	"runtime"
-	"sync"
-
 	"kilovet/hv/circuit"
+	"kilovet/hv/parallel"
 	"kilovet/hv/quantity"
 )
 
@@ -33,7 +31,7 @@ func DischargeWithOneOpen(c *circuit.Circuit, from Voltages, limit quantity.Volt
 		return nil, err
 	}
 	all, errs := make([]Opened, len(names)), make([]error, len(names))
-	spread(len(names), func(i int) {
+	parallel.Each(len(names), func(i int) {
 		if intact.idle[names[i]] {
 			all[i] = Opened{names[i], intact.Slowest(), intact.MostLeft(), intact}
 			return
@@ -64,23 +62,4 @@ func dischargeOpen(c *circuit.Circuit, name string, from Voltages, limit quantit
 		slowest = d.Slowest()
 	}
 	return Opened{name, slowest, d.MostLeft(), d}, nil
-}
-
-// spread does independent pieces of work on all processors; their results are placed
-// by index.
-func spread(n int, work func(i int)) {
-	var group sync.WaitGroup
-	next := make(chan int)
-	for range min(n, runtime.GOMAXPROCS(0)) {
-		group.Go(func() {
-			for i := range next {
-				work(i)
-			}
-		})
-	}
-	for i := range n {
-		next <- i
-	}
-	close(next)
-	group.Wait()
 }

@@ -5,6 +5,7 @@ import (
 
 	"kilovet/hv/circuit"
 	"kilovet/hv/lack"
+	"kilovet/hv/parallel"
 	"kilovet/hv/quantity"
 )
 
@@ -51,7 +52,7 @@ func Short(c *circuit.Circuit, from Voltages, node string) (Delivered, error) {
 // Shorts are the shorts at several nodes, one by one, on all processors.
 func Shorts(c *circuit.Circuit, from Voltages, nodes []string) ([]Delivered, []error) {
 	all, errs := make([]Delivered, len(nodes)), make([]error, len(nodes))
-	spread(len(nodes), func(i int) { all[i], errs[i] = Short(c, from, nodes[i]) })
+	parallel.Each(len(nodes), func(i int) { all[i], errs[i] = Short(c, from, nodes[i]) })
 	return all, errs
 }
 

@@ -4,9 +4,9 @@ import (
 	"fmt"
 	"math"
 	"math/cmplx"
-	"sync"
 
 	"kilovet/hv/lack"
+	"kilovet/hv/parallel"
 	"kilovet/hv/profile"
 	"kilovet/hv/quantity"
 	"kilovet/insulation"
@@ -52,11 +52,7 @@ func (e *Evidence) Answers(f *build.Arrangement) ([]Answer, error) {
 		}
 		list := nearest(f.Dimensions, weak.At)
 		all := make([]Answer, len(list))
-		var solving sync.WaitGroup
-		for i, d := range list {
-			solving.Go(func() { all[i] = e.answer(f, d, weak, asked) })
-		}
-		solving.Wait()
+		parallel.Each(len(list), func(i int) { all[i] = e.answer(f, list[i], weak, asked) })
 		return all, nil
 	})
 }

@@ -4,6 +4,7 @@ import (
 	"slices"
 	"sync"
 
+	"kilovet/hv/parallel"
 	"kilovet/hv/quantity"
 	"kilovet/rules/evidence"
 	"kilovet/rules/parts"
@@ -107,9 +108,6 @@ func reach(e *evidence.Evidence, f Fault) []string {
 	return all
 }
 
-// workers is how many faults are computed at once.
-const workers = 4
-
 // StudyAll computes what every fault of a chain does, in the order of the library. It is
 // done once in a review; progress is told after each.
 func StudyAll(e *evidence.Evidence) []Outcome {
@@ -123,25 +121,14 @@ func StudyAll(e *evidence.Evidence) []Outcome {
 // study computes a list of faults, several at once; results stand in the order of the list.
 func study(e *evidence.Evidence, list []Fault) []Outcome {
 	outcomes := make([]Outcome, len(list))
-	next := make(chan int)
-	var group sync.WaitGroup
 	var telling sync.Mutex
 	done := 0
-	for range workers {
-		group.Go(func() {
-			for i := range next {
-				outcomes[i] = Study(e, list[i])
-				telling.Lock()
-				done++
-				e.Tell("single faults", done, len(list))
-				telling.Unlock()
-			}
-		})
-	}
-	for i := range list {
-		next <- i
-	}
-	close(next)
-	group.Wait()
+	parallel.Each(len(list), func(i int) {
+		outcomes[i] = Study(e, list[i])
+		telling.Lock()
+		defer telling.Unlock()
+		done++
+		e.Tell("single faults", done, len(list))
+	})
 	return outcomes
 }

@@ -2,11 +2,11 @@ package readings
 
 import (
 	"math"
-	"runtime"
 	"slices"
 	"sync"
 
 	"kilovet/hv/match"
+	"kilovet/hv/parallel"
 	"kilovet/rules/evidence"
 )
 
@@ -161,26 +161,15 @@ func blend(a, b []float64, share float64) []float64 {
 // are placed by index.
 func (b *bench) tryAll(list []hypothesis) []trial {
 	trials := make([]trial, len(list))
-	next := make(chan int)
-	var done sync.WaitGroup
 	var telling sync.Mutex
 	tried := 0
-	for range runtime.GOMAXPROCS(0) {
-		done.Go(func() {
-			for i := range next {
-				trials[i] = b.try(list[i])
-				telling.Lock()
-				tried++
-				b.e.Tell("what the readings point to", tried, len(list))
-				telling.Unlock()
-			}
-		})
-	}
-	for i := range list {
-		next <- i
-	}
-	close(next)
-	done.Wait()
+	parallel.Each(len(list), func(i int) {
+		trials[i] = b.try(list[i])
+		telling.Lock()
+		defer telling.Unlock()
+		tried++
+		b.e.Tell("what the readings point to", tried, len(list))
+	})
 	return trials
 }
 

@@ -165,6 +165,23 @@ func oneSided(s gas.State, l shape.Line, sharp gap.Polarity, starts gap.Result[q
 	return a, err
 }
 
+// AgainstPlane is what a gap in air would stand at least if one electrode were a sharp
+// positive one and the other blunt: less than a pair of needles. A lack in other media and
+// past half a metre.
+func AgainstPlane(g gap.Gap) (gap.Answer[quantity.Voltage], error) {
+	s, err := gas.StateOf(g)
+	if err == nil {
+		err = inGas(g)
+	}
+	if err != nil || s.Gas != gap.AirGas {
+		if err == nil {
+			err = lack.Key("spacing.shape")
+		}
+		return gap.Answer[quantity.Voltage]{}, err
+	}
+	return gas.PointPlane(s, g.Clearance)
+}
+
 // needles is the breakdown of a gap whose electrodes are not described.
 func needles(g gap.Gap, s gas.State) (gap.Answer[quantity.Voltage], error) {
 	switch {

@@ -11,7 +11,7 @@ import (
 // drive on for some periods, which gives the peaks, and with the drive off until the
 // stored charge has run off, which gives the energies. Assumptions of this review.
 const (
-	arcResistance quantity.Resistance = 1
+	arcResistance quantity.Resistance = 0.05
 	arcPeriods    quantity.Time       = 20 // in periods of the drive
 )
 

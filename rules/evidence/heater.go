@@ -157,3 +157,10 @@ func (e *Evidence) limitSwing(f quantity.Frequency) (quantity.Fraction, quantity
 	limit, err := emitter.LimitSwing(g.CathodeTemperature.V, swing)
 	return limit, swing, err
 }
+
+// Unheated reports whether a cathode is hot by what is said of it, and nothing is said of
+// what heats it.
+func (e *Evidence) Unheated() bool {
+	g := e.chain.Gun
+	return e.chain.Heater == nil && g.IsFitted() && g.CathodeTemperature.Set()
+}

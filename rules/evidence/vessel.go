@@ -1,6 +1,9 @@
 package evidence
 
 import (
+	"slices"
+
+	"kilovet/hv/chain"
 	"kilovet/hv/quantity"
 	"kilovet/insulation/gap"
 	"kilovet/insulation/vacuum"
@@ -23,4 +26,10 @@ func (e *Evidence) DischargeBand() (vacuum.Band, error) {
 		return vacuum.Band{}, err
 	}
 	return e.Vessel().Band(most.Value)
+}
+
+// HasVessel reports whether a vacuum is described: by itself, or as the medium of a
+// spacing or the side of a feedthrough of a supply.
+func (e *Evidence) HasVessel() bool {
+	return e.chain.Vacuum != nil || e.HasSupply() && slices.ContainsFunc(e.Spacings(), func(s *chain.Spacing) bool { return s.Medium.V == "vacuum" })
 }

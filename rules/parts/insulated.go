@@ -42,11 +42,19 @@ var feedVoltage = rule.Rule{
 	},
 	Judge: func(e *evidence.Evidence) rule.Judgement {
 		h := e.Chain().Heater
+		if e.Unheated() {
+			return unheated("feed.voltage")
+		}
 		if h == nil || h.Feed == nil || h.Feed.Kind.V == "battery" {
 			return rule.Over("no heater feed across the high voltage is described")
 		}
 		return insulated(e, "feed.voltage", "heater.feed", "cathode", "mains", h.Feed.RatedVoltage)
 	},
+}
+
+// unheated is the judgement on the feed of a hot cathode whose heater is not described.
+func unheated(id string) rule.Judgement {
+	return rule.One(rule.Finding{Rule: id, Subject: "heater.feed", Concern: rule.Life}.Lacking(lack.Key("heater")))
 }
 
 func insulated(e *evidence.Evidence, id, subject, from, to string, rated document.Given[quantity.Voltage]) rule.Judgement {
@@ -70,6 +78,9 @@ var feedTest = rule.Rule{
 	},
 	Judge: func(e *evidence.Evidence) rule.Judgement {
 		h := e.Chain().Heater
+		if e.Unheated() {
+			return unheated("feed.test_voltage")
+		}
 		if h == nil || h.Feed == nil || h.Feed.Kind.V == "battery" {
 			return rule.Over("no heater feed across the high voltage is described")
 		}

@@ -112,7 +112,7 @@ func stopped(e *evidence.Evidence) error {
 // the judgement beside it.
 func energetic(e *evidence.Evidence, f *rule.Finding) (quantity.Voltage, rule.Judgement, bool) {
 	c := e.Chain()
-	if !e.HasSupply() || !c.HasCathode() && len(c.Targets) == 0 && len(c.Shields) == 0 && c.Vacuum == nil {
+	if !e.HasSupply() || !c.HasCathode() && len(c.Targets) == 0 && len(c.Shields) == 0 && !e.HasVessel() {
 		return 0, rule.Over("neither a cathode nor a vessel is described"), false
 	}
 	most, err := e.Accelerating()

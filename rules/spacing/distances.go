@@ -67,6 +67,14 @@ func inAir(s *chain.Spacing) bool {
 	return s.Medium.V == "air" || s.Medium.V == "printed board" || s.Medium.V == "gas" && s.Gas.Or("air") == "air"
 }
 
+// classTaken is what is taken for granted where a spacing does not say what it has to do.
+func classTaken(s *chain.Spacing) []string {
+	if s.Insulation.Set() || s.Medium.V == "vacuum" || otherGas(s) {
+		return nil
+	}
+	return []string{"insulation is basic where the spacing does not say; reinforced asks for more"}
+}
+
 // distance judges a given distance against the needed one.
 func distance(e *evidence.Evidence, s *chain.Spacing, id string, given document.Given[quantity.Length], needed func(evidence.Spacing) gap.Result[quantity.Length]) rule.Finding {
 	f := finding(id, concern(s), rule.AtLeast, s)
@@ -113,7 +121,7 @@ func distance(e *evidence.Evidence, s *chain.Spacing, id string, given document.
 			f.Because += "; " + taken
 		}
 	}
-	f = f.Least(rule.Of(counted), rule.Of(need.Value), limits.DistanceMargin).Assume(need.Assumptions...)
+	f = f.Least(rule.Of(counted), rule.Of(need.Value), limits.DistanceMargin).Assume(need.Assumptions...).Assume(classTaken(s)...)
 	switch {
 	case f.Verdict == rule.Meets:
 	case assumedOnly(f, limits.DistanceMargin):

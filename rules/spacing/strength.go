@@ -6,6 +6,7 @@ import (
 
 	"kilovet/hv/chain"
 	"kilovet/hv/quantity"
+	"kilovet/insulation"
 	"kilovet/rules/evidence"
 	"kilovet/rules/limits"
 	"kilovet/rules/rule"
@@ -63,7 +64,7 @@ func judgeBreakdown(e *evidence.Evidence, s *chain.Spacing) rule.Finding {
 	f.Because = strings.Join(append([]string{f.Because}, remarks...), "; ")
 	f.Sources = append(f.Sources, rule.Cited(cited)...)
 	limit := stands.Value * limits.BreakdownShare
-	f = f.ShareOf(rule.Of(stands.Value)).Most(rule.Of(x.Voltages.Peak), rule.Of(limit), limits.BreakdownShare/limits.BreakdownComfort-1).Assume(stands.Assumptions...)
+	f = f.ShareOf(rule.Of(stands.Value)).Most(rule.Of(x.Voltages.Peak), rule.Of(limit), limits.BreakdownShare/limits.BreakdownComfort-1).Assume(stands.Assumptions...).Assume(needlesTaken(s, x)...)
 	switch {
 	case f.Verdict == rule.Meets:
 	case assumedOnly(f, limits.BreakdownShare/limits.BreakdownComfort-1):
@@ -72,6 +73,23 @@ func judgeBreakdown(e *evidence.Evidence, s *chain.Spacing) rule.Finding {
 		f.Remedy = againstBreakdown(s, x)
 	}
 	return f
+}
+
+// needlesTaken is what is taken for granted of electrodes that are not described, where it
+// matters: a sharp one against a blunt one stands less than a pair of needles.
+func needlesTaken(s *chain.Spacing, x evidence.Spacing) []string {
+	if s.Shape != nil || x.Computed || s.Medium.V != "air" {
+		return nil
+	}
+	least, err := insulation.AgainstPlane(x.Gap)
+	if err == nil && quantity.AtMost(x.Voltages.Peak, least.Value*limits.BreakdownComfort) {
+		return nil
+	}
+	text := "both electrodes are sharp"
+	if err == nil {
+		text += "; a sharp positive one against a blunt one would stand " + quantity.Text(least.Value)
+	}
+	return []string{text + ": give spacing.shape"}
 }
 
 var coronaSource = rule.Source{Text: "highest voltage at most the onset estimate; corona makes ozone, noise and radio interference, it does not break a gap", Mark: rule.Practice}

@@ -5,6 +5,7 @@ import (
 
 	"kilovet/hv/chain"
 	"kilovet/hv/document"
+	"kilovet/hv/lack"
 	"kilovet/hv/quantity"
 	"kilovet/rules/evidence"
 	"kilovet/rules/limits"
@@ -139,6 +140,9 @@ var humShare = rule.Rule{
 	},
 	Judge: func(e *evidence.Evidence) rule.Judgement {
 		h := e.Chain().Heater
+		if e.Unheated() {
+			return rule.One(rule.Finding{Rule: "heater.hum", Subject: "cathode", Concern: rule.Performance}.Lacking(lack.Key("heater")))
+		}
 		if h == nil || h.Feed == nil || h.Feed.Kind.V == "battery" {
 			return rule.Over("no heater feed across the high voltage is described")
 		}

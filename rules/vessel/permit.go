@@ -19,7 +19,7 @@ var freeSource = rule.Source{Text: "marginal above 0.001 Torr cm over the longes
 var permit = rule.Rule{
 	ID: "vacuum.permit", Title: "Pressure that permits high voltage",
 	Demands: "High voltage is permitted only below 0.01 Torr cm over the longest straight path between parts at different potential.",
-	Applies: "Where a gun or a vessel is described.",
+	Applies: "Where a gun or a vessel is described, or a supply with a spacing in vacuum.",
 	Margin:  "marginal above 0.001 Torr cm",
 	Concern: rule.Equipment,
 	Sources: []rule.Source{{Text: "no high voltage above 0.01 Torr cm over the longest path", Mark: rule.Practice, Governs: true}, freeSource},
@@ -32,7 +32,7 @@ var permit = rule.Rule{
 
 func judgePermit(e *evidence.Evidence) rule.Judgement {
 	c := e.Chain()
-	if c.Vacuum == nil && c.Gun == nil {
+	if c.Gun == nil && !e.HasVessel() {
 		return rule.Over("no vessel and no gun is described")
 	}
 	f := rule.Finding{Rule: "vacuum.permit", Subject: "vessel", Concern: rule.Equipment, Relation: rule.AtMost}

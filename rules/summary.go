@@ -19,8 +19,8 @@ func summary(e *evidence.Evidence) []Line {
 		return []Line{{"Chain", text}}
 	}
 	lines := []Line{
-		{"Supply", fmt.Sprintf("%s %s multiplier, %d stages, %s %s at %s", c.Multiplier.Polarity.V, c.Multiplier.Topology.Or("half-wave"),
-			c.Multiplier.Stages.V, quantity.Text(c.Drive.Peak.V), c.Drive.Waveform.Or("sine"), quantity.Text(c.Drive.Frequency.V))},
+		{"Supply", fmt.Sprintf("%s %s multiplier, %s, %s %s at %s", c.Multiplier.Polarity.V, c.Multiplier.Topology.Or("half-wave"),
+			stages(c.Multiplier.Stages.V), quantity.Text(c.Drive.Peak.V), c.Drive.Waveform.Or("sine"), quantity.Text(c.Drive.Frequency.V))},
 		{"Control", control(e)},
 		{"Output", outputLine(e)},
 	}
@@ -43,6 +43,21 @@ func control(e *evidence.Evidence) string {
 	return fmt.Sprintf("regulated at %s; needs %s of drive", quantity.Text(c.Regulation.Set.V), quantity.Text(needed))
 }
 
+func stages(n int) string {
+	if n == 1 {
+		return "1 stage"
+	}
+	return fmt.Sprintf("%d stages", n)
+}
+
+// highest is the state in which the output stands highest, in words.
+func highest(e *evidence.Evidence) string {
+	if e.Chain().Regulation == nil {
+		return "at full drive"
+	}
+	return "with regulation lost"
+}
+
 func outputLine(e *evidence.Evidence) string {
 	v, err := e.Potential("output")
 	if err != nil {
@@ -50,9 +65,9 @@ func outputLine(e *evidence.Evidence) string {
 	}
 	lost, err := e.In(evidence.Lost).Between("output", "ground")
 	if err != nil {
-		return fmt.Sprintf("%s working; with regulation lost not known: %v", quantity.Text(v), err)
+		return fmt.Sprintf("%s working; %s not known: %v", quantity.Text(v), highest(e), err)
 	}
-	return fmt.Sprintf("%s working, up to %s with regulation lost", quantity.Text(v), quantity.Text(lost))
+	return fmt.Sprintf("%s working, up to %s %s", quantity.Text(v), quantity.Text(lost), highest(e))
 }
 
 func rippleLine(e *evidence.Evidence) string {

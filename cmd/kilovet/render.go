@@ -8,6 +8,7 @@ import (
 
 	"github.com/spf13/cobra"
 
+	"kilovet/hv/parallel"
 	"kilovet/reports/html"
 	"kilovet/reports/json"
 	"kilovet/reports/page"
@@ -82,7 +83,7 @@ func made(makers []maker) ([]output, error) {
 		group.Go(func() {
 			defer func() {
 				if what := recover(); what != nil {
-					errs[i] = fmt.Errorf("%v%s", what, place())
+					errs[i] = fmt.Errorf("%v%s", what, parallel.Place())
 				}
 			}()
 			data, err := m.make()

@@ -28,6 +28,7 @@ type Lack struct {
 	Why  string   // one plain clause
 }
 
+// Error says why, in plain words.
 func (l *Lack) Error() string { return l.Why }
 
 // Key is a lack for want of keys of the description.

@@ -49,24 +49,25 @@ func spread(n, workers int, work func(i int)) {
 func caught(work func()) (what string) {
 	defer func() {
 		if r := recover(); r != nil {
-			what = fmt.Sprintf("%v (%s)", r, where())
+			what = fmt.Sprintf("%v%s", r, Place())
 		}
 	}()
 	work()
 	return ""
 }
 
-// where is the function that panicked, with its line.
-func where() string {
+// Place is the line of this program in which the running panic began, in brackets; empty
+// where no panic runs.
+func Place() string {
 	callers := make([]uintptr, 64)
 	frames := runtime.CallersFrames(callers[:runtime.Callers(1, callers)])
 	for panicking, more := false, true; more; {
 		var f runtime.Frame
 		f, more = frames.Next()
 		if panicking && !strings.HasPrefix(f.Function, "runtime.") {
-			return fmt.Sprintf("%s, line %d", f.Function, f.Line)
+			return fmt.Sprintf(" (%s, line %d)", f.Function, f.Line)
 		}
 		panicking = panicking || f.Function == "runtime.gopanic"
 	}
-	return "where is not known"
+	return ""
 }

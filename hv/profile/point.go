@@ -14,6 +14,7 @@ const sameness = 1e-6
 // Point is a place in the half plane.
 type Point struct{ R, Z quantity.Length }
 
+// String is the point in words, as messages name it.
 func (p Point) String() string {
 	return fmt.Sprintf("r = %.6g mm, z = %.6g mm", float64(p.R)*1e3, float64(p.Z)*1e3)
 }

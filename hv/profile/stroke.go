@@ -33,6 +33,7 @@ type Fault struct {
 	What    string
 }
 
+// Error says what is wrong with the outline.
 func (f Fault) Error() string {
 	return fmt.Sprintf("profile %q, stroke %d, at %v: %s", f.Profile, f.Stroke+1, f.At, f.What)
 }
@@ -40,6 +41,7 @@ func (f Fault) Error() string {
 // Faults are all that is wrong, in the order of the strokes.
 type Faults []Fault
 
+// Error says all that is wrong.
 func (f Faults) Error() string {
 	lines := make([]string, len(f))
 	for i := range f {

@@ -15,6 +15,7 @@ type Refusal struct {
 	Remedy string // what to write instead
 }
 
+// Error says what is wrong and what to write.
 func (r *Refusal) Error() string { return r.What + "; " + r.Remedy }
 
 var number = regexp.MustCompile(`^([+-]?(?:\d+(?:\.\d*)?|\.\d+))(?:[eE]([+-]?\d+))?`)

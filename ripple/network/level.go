@@ -22,6 +22,10 @@ type level struct {
 // held is the part of the voltage to be held by which the mean may be off.
 const held = 1e-8
 
+// strange is the part of the drive by which a lift makes the changes over a period before
+// and after it unlike: drops and loads do not grow with the drive.
+const strange = 1e-5
+
 // amplify multiplies the alternating sources.
 func (s *system) amplify(f float64) {
 	for _, v := range [][]float64{s.capSine, s.capSquare, s.condSine, s.condSquare} {
@@ -147,10 +151,6 @@ func (s *search) goBack(p *spot) {
 	s.driveTo(p.drive)
 	copy(s.x, p.x)
 }
-
-// strange is the part of the drive by which a lift makes the changes over a period before
-// and after it unlike: drops and loads do not grow with the drive.
-func (s *search) strange() float64 { return 1e-5 }
 
 // returnTo is the same at the present drive.
 func (s *search) returnTo(p *spot) {

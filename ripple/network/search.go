@@ -130,7 +130,7 @@ func (s *search) once(g grade, done func() bool) (finished bool, err error) {
 	s.mark(&s.sound)
 	s.last = size
 	s.follows(f)
-	if math.Abs(f-1) > s.strange() {
+	if math.Abs(f-1) > strange {
 		s.last, s.trial = math.Inf(1), false
 	}
 	s.pace.smooth = s.largestCharge(s.step) <= exacting*s.pace.passed

@@ -86,18 +86,8 @@ func distance(e *evidence.Evidence, s *chain.Spacing, id string, given document.
 		return f.Lacking(err)
 	}
 	need := needed(x)
-	if need.Lack != nil && id == "spacing.creepage" && untested(need.Lack) {
-		return bounded(f, s, x, need.Lack)
-	}
-	if need.Lack != nil && id == "spacing.clearance" && tooSharp(s, x) {
-		return neverEnough(f, x, need.Lack)
-	}
 	if need.Lack != nil {
-		f = f.Lacking(need.Lack)
-		if given.Set() && need.Lack.Kind != lack.Missing {
-			f.Remedy = alternatives(rounded(s, x, x.Voltages.Peak/quantity.Voltage(evidence.WorkingShare(x.Gap))), f.Remedy)
-		}
-		return f
+		return unneeded(f, s, x, given, need.Lack)
 	}
 	f.Under = x.Under.Text()
 	if id == "spacing.creepage" {
@@ -128,6 +118,21 @@ func distance(e *evidence.Evidence, s *chain.Spacing, id string, given document.
 		f.Remedy = confirm
 	default:
 		f.Remedy = alternatives(wider(s, given, need.Value+given.V-counted), lowered(id, x), "lower the voltage")
+	}
+	return f
+}
+
+// unneeded is the finding where no distance that is needed is known.
+func unneeded(f rule.Finding, s *chain.Spacing, x evidence.Spacing, given document.Given[quantity.Length], why *lack.Lack) rule.Finding {
+	switch {
+	case f.Rule == "spacing.creepage" && untested(why):
+		return bounded(f, s, x, why)
+	case f.Rule == "spacing.clearance" && tooSharp(s, x):
+		return neverEnough(f, x, why)
+	}
+	f = f.Lacking(why)
+	if given.Set() && why.Kind != lack.Missing {
+		f.Remedy = alternatives(rounded(s, x, x.Voltages.Peak/quantity.Voltage(evidence.WorkingShare(x.Gap))), f.Remedy)
 	}
 	return f
 }

@@ -22,7 +22,7 @@ func energyTables(e *evidence.Evidence) []exhibit.Table {
 			return nil
 		}
 	}
-	return gather(at, nodeEnergy, openedTable, comebackTable, limitTable, rodTable, bodyTable)
+	return gather(at, nodeEnergy, openedAtNodes, openedTable, comebackAtNodes, comebackTable, limitTable, rodTable, bodyTable, openedEach)
 }
 
 func under(e *evidence.Evidence) string { return "state: " + e.Condition().Text() + ". " }

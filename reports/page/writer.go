@@ -7,6 +7,7 @@ import (
 
 	"kilovet/reports/digest"
 	"kilovet/rules"
+	"kilovet/rules/exhibit"
 	"kilovet/rules/figure"
 	"kilovet/rules/rule"
 )
@@ -33,7 +34,9 @@ func newWriter(r *rules.Review) *writer {
 	for i, f := range digest.Sorted(r.Findings) {
 		n.anchors[about{f.Rule, f.Subject}] = fmt.Sprintf("finding-%d", i+1)
 	}
-	for _, c := range n.parts {
+	for k, c := range n.parts {
+		c.Tables = slices.DeleteFunc(c.Tables, func(t exhibit.Table) bool { return t.Detail })
+		n.parts[k].Tables = c.Tables
 		for i := range c.Curves {
 			c.Curves[i] = digest.Thinned(c.Curves[i])
 		}

@@ -124,6 +124,9 @@ func (e *Evidence) shorted(nodes []string) (map[string]outcome[Short], error) {
 	return all, nil
 }
 
+// Same reports whether two names are of one node.
+func (e *Evidence) Same(a, b string) bool { return e.canonical(a) == e.canonical(b) }
+
 // canonical is the first name of a node.
 func (e *Evidence) canonical(node string) string {
 	n, ok := e.Layout().Node(node)

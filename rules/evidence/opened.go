@@ -1,15 +1,21 @@
 package evidence
 
 import (
+	"kilovet/hv/circuit"
 	"kilovet/hv/quantity"
 	"kilovet/hv/steady"
 )
 
+// At is the discharge of one node with the part open.
+func (o Opened) At(node string) (Discharge, error) {
+	x, err := o.decay.Node(node)
+	return discharge(x), err
+}
+
 // MeterAfter is what the meter shows with a part open after switching off, as the voltage of
-// the sensed node: in the end where a node stays charged, else when the last one falls to
-// what counts as discharged.
-func (e *Evidence) MeterAfter(o Opened) (quantity.Voltage, error) {
-	tap, err := o.decay.AtTime("divider.tap", o.when())
+// the sensed node, when a discharge is at its end: in the end of all where it never is.
+func (e *Evidence) MeterAfter(o Opened, d Discharge) (quantity.Voltage, error) {
+	tap, err := o.decay.AtTime("divider.tap", d.ends())
 	if err != nil {
 		return 0, err
 	}
@@ -21,12 +27,18 @@ func (e *Evidence) MeterAfter(o Opened) (quantity.Voltage, error) {
 	return magnitude(tap) * quantity.Voltage(ratio), err
 }
 
-// when is the time at which the last node counts as discharged; the end where none does.
-func (o Opened) when() quantity.Time {
-	if o.Worst.Never {
+// ends is when a discharge counts as ended.
+func (d Discharge) ends() quantity.Time {
+	if d.Never {
 		return steady.InTheEnd
 	}
-	return o.Worst.Time
+	return d.Time
+}
+
+// IsDiode reports whether a part of the circuit is a diode.
+func (e *Evidence) IsDiode(part string) bool {
+	el := e.Layout().Element(part)
+	return el != nil && el.Kind == circuit.Diode
 }
 
 // ElementsOf is how many elements in series and strings in parallel a resistor of the

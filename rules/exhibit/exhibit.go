@@ -99,6 +99,8 @@ type Table struct {
 	Rows    [][]Cell // as many cells a row as columns
 	Basis   string
 	Note    string
+	// Detail marks what is for whoever looks closely: sheets leave it out, JSON never does.
+	Detail bool
 }
 
 // Column heads one column.

@@ -109,8 +109,9 @@ func measuringGap(g gap.Gap, s gas.State) (table.Reading[quantity.Voltage], erro
 // plates it is the law of uniform fields or Paschen's; round other shapes the onset or,
 // where it is higher in air, what sharp electrodes at the same distance stand; without a
 // shape it is that of needle points. The polarity is that of the sharper electrode: a
-// positive or unknown one against a blunt one stands less than a pair of needles, of which
-// one is positive whatever the polarity.
+// positive, changing or unknown one against a blunt one stands less than a pair of needles,
+// of which one is positive whatever the polarity. Without a shape, no polarity says that
+// both are alike.
 func Breakdown(g gap.Gap, sharp gap.Polarity) (gap.Answer[quantity.Voltage], error) {
 	return breakdown(g, sharp, gap.ResultOf(Onset(g)))
 }
@@ -131,7 +132,7 @@ func breakdown(g gap.Gap, sharp gap.Polarity, starts gap.Result[quantity.Voltage
 		return none, err
 	}
 	if g.Shape == nil {
-		return needles(g, s)
+		return sharpEnds(g, s, sharp)
 	}
 	l, err := lineOf(g)
 	switch {
@@ -151,19 +152,29 @@ func breakdown(g gap.Gap, sharp gap.Polarity, starts gap.Result[quantity.Voltage
 // oneSided is the breakdown of a sharper electrode against a blunter one by its polarity,
 // that of the positive one where it is not known.
 func oneSided(s gas.State, l shape.Line, sharp gap.Polarity, starts gap.Result[quantity.Voltage]) (gap.Answer[quantity.Voltage], error) {
-	law, told := gas.PointPlane, "the sharper electrode is positive"
-	switch sharp {
-	case gap.Negative:
-		law, told = gas.Needles, "the sharper electrode is negative, and stands no less than a pair of needles"
-	case gap.Unknown:
-		told = "the sharper electrode is taken as positive, the worse"
-	}
+	law, told := sharpLaw(sharp)
 	a, err := crossing(s, l, law, starts)
 	if err == nil && (starts.Lack != nil || a.Value > starts.Value) {
 		a.Because += "; " + told
 	}
 	return a, err
 }
+
+// sharpLaw is what a sharp electrode of a polarity stands against a blunter one, and why.
+func sharpLaw(sharp gap.Polarity) (law sharpGap, told string) {
+	switch sharp {
+	case gap.Negative:
+		return gas.Needles, "the sharper electrode is negative, and stands no less than a pair of needles"
+	case gap.Positive:
+		return gas.PointPlane, "the sharper electrode is positive"
+	case gap.Changing:
+		return gas.PointPlane, "the sharper electrode is positive at times, the worse"
+	}
+	return gas.PointPlane, "the sharper electrode is taken as positive, the worse"
+}
+
+// sharpGap is a law of sharp electrodes a distance apart.
+type sharpGap = func(gas.State, quantity.Length) (gap.Answer[quantity.Voltage], error)
 
 // AgainstPlane is what a gap in air would stand at least if one electrode were a sharp
 // positive one and the other blunt: less than a pair of needles. A lack in other media and
@@ -182,21 +193,29 @@ func AgainstPlane(g gap.Gap) (gap.Answer[quantity.Voltage], error) {
 	return gas.PointPlane(s, g.Clearance)
 }
 
-// needles is the breakdown of a gap whose electrodes are not described.
-func needles(g gap.Gap, s gas.State) (gap.Answer[quantity.Voltage], error) {
+// sharpEnds is the breakdown of a gap whose electrodes are not described: both are sharp,
+// or, where one is said to be the sharper, that one by its polarity.
+func sharpEnds(g gap.Gap, s gas.State, sharp gap.Polarity) (gap.Answer[quantity.Voltage], error) {
 	switch {
 	case s.Gas != gap.AirGas:
 		return gap.Answer[quantity.Voltage]{}, lack.Key("spacing.shape")
 	case g.Clearance <= 0:
 		return gap.Answer[quantity.Voltage]{}, lack.Key("spacing.clearance")
+	case sharp == gap.Unknown:
+		return gas.Needles(s, g.Clearance)
 	}
-	return gas.Needles(s, g.Clearance)
+	law, told := sharpLaw(sharp)
+	a, err := law(s, g.Clearance)
+	if err == nil {
+		a.Because += "; " + told
+	}
+	return a, err
 }
 
 // crossing is the larger of onset and what sharp electrodes stand: a discharge that
 // starts earlier than it can cross stays a corona. A radius too fine for an onset is
 // sharp. Where the law of sharp electrodes ends before the gap does, both are lower bounds.
-func crossing(s gas.State, l shape.Line, law func(gas.State, quantity.Length) (gap.Answer[quantity.Voltage], error), starts gap.Result[quantity.Voltage]) (gap.Answer[quantity.Voltage], error) {
+func crossing(s gas.State, l shape.Line, law sharpGap, starts gap.Result[quantity.Voltage]) (gap.Answer[quantity.Voltage], error) {
 	fine := quantity.Length(s.Density())*l.Radius() < gas.FinestRadius
 	if starts.Lack != nil && !fine {
 		return gap.Answer[quantity.Voltage]{}, starts.Lack
@@ -216,7 +235,7 @@ func crossing(s gas.State, l shape.Line, law func(gas.State, quantity.Length) (g
 
 // narrowest is what sharp electrodes stand where their law ends before a gap does, a lower
 // bound; nothing where it does not begin.
-func narrowest(s gas.State, d quantity.Length, law func(gas.State, quantity.Length) (gap.Answer[quantity.Voltage], error)) gap.Answer[quantity.Voltage] {
+func narrowest(s gas.State, d quantity.Length, law sharpGap) gap.Answer[quantity.Voltage] {
 	for end := d; end > d/1000; end /= 1.02 {
 		if a, err := law(s, end); err == nil {
 			a.AtLeast = true

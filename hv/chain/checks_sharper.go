@@ -14,8 +14,6 @@ func (s *survey) sharperOf(sp *Spacing) {
 	switch {
 	case s.sound(sp.Medium.Place) && sp.Medium.V != "air" && sp.Medium.V != "gas":
 		s.fault(key.Place, "a key of spacings in air, not in "+sp.Medium.V, "leave it out, or correct the medium")
-	case s.without(sp.Shape != nil) && s.lacks(sp.Field.Place):
-		s.fault(key.Place, "no shape: both electrodes are judged as sharp", "describe the shape, or leave it out")
 	case sp.Shape != nil && s.sound(sp.Shape.Kind.Place) && alike[sp.Shape.Kind.V]:
 		s.fault(key.Place, "the electrodes of a shape of kind "+quoted(sp.Shape.Kind.V)+" are alike", "leave it out")
 	case side && sp.Voltage.Set():

@@ -443,10 +443,10 @@ medium = "air"
 sharper_electrode = "from" # FAULT 21 spacing: spacing.sharper_electrode: a side of a spacing that is between no nodes; give positive or negative
 shape = { kind = "sphere-plane", radius = "5 mm" }
 [[spacing]]
-name = "no shape"
+name = "no shape, and none is needed"
 voltage = "20 kV"
 medium = "air"
-sharper_electrode = "negative" # FAULT 21 spacing: spacing.sharper_electrode: no shape: both electrodes are judged as sharp; describe the shape
+sharper_electrode = "negative"
 [[spacing]]
 name = "alike"
 voltage = "20 kV"

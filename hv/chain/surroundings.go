@@ -124,7 +124,7 @@ type Spacing struct {
 	Ribs             *Ribs                            `key:"ribs" means:"ribs across the surface; the creepage is measured over them"`
 	Board            document.Given[string]           `key:"board" words:"external uncoated | internal | polymer coated | conformal coated | termination bare | termination coated" means:"printed board: where the conductors lie (default: external uncoated)" example:"conformal coated"`
 	ElectrodeSurface document.Given[string]           `key:"electrode_surface" words:"smooth | weathered | stranded" means:"air and gas: surface of the electrodes (default: smooth)" example:"smooth"`
-	SharperElectrode document.Given[string]           `key:"sharper_electrode" words:"positive | negative | from | to" means:"air: polarity of the sharper electrode where a voltage is given, between nodes its side (default: the worse polarity)" example:"from"`
+	SharperElectrode document.Given[string]           `key:"sharper_electrode" words:"positive | negative | from | to" means:"air: polarity of the sharper electrode where a voltage is given, between nodes its side (default: the worse polarity; without a shape two needles)" example:"from"`
 	Finish           document.Given[string]           `key:"finish" words:"machined | polished" means:"vacuum: finish of the electrodes" example:"polished"`
 	Conditioned      document.Given[bool]             `key:"conditioned" means:"vacuum: the electrodes were conditioned above their working voltage" example:"true"`
 	StressedArea     document.Given[quantity.Area]    `key:"stressed_area" range:"> 0 mm2, <= 100 m2" means:"vacuum: area of electrode above 90 % of the peak field" example:"80 mm2"`

@@ -43,11 +43,12 @@ const (
 // Polarity is the sign of the more highly stressed electrode against the other.
 type Polarity string
 
-// The polarities; unknown is judged as the worse of the two.
+// The polarities; unknown and changing are judged as the worse of the two.
 const (
 	Unknown  Polarity = ""
 	Positive Polarity = "positive"
 	Negative Polarity = "negative"
+	Changing Polarity = "changing" // now the one, now the other
 )
 
 // Board says where the conductors of a printed board lie (IPC-2221 Table 6-1).

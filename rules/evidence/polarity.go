@@ -6,14 +6,18 @@ import (
 )
 
 // sharp is the polarity of the sharper electrode of a spacing in air: as stated, or by the
-// potentials of its nodes where the description says on which side it is. Unknown, judged
-// as the worse of the two, where it does not, where the nodes change sign, and at the mains.
+// potentials of its nodes where the description says on which side it is. Unknown where it
+// does not, changing where the nodes change sign and at the mains.
 func (e *Evidence) sharp(s *chain.Spacing) (gap.Polarity, error) {
 	side := s.SharperElectrode.V
 	if !s.SharperElectrode.Set() || side != "from" && side != "to" {
 		return gap.Polarity(side), nil
 	}
-	return e.polarityOf(s, side)
+	p, err := e.polarityOf(s, side)
+	if err == nil && p == gap.Unknown {
+		p = gap.Changing
+	}
+	return p, err
 }
 
 // polarityOf is the lasting sign of one side of a spacing against the other, over all nodes

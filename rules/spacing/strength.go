@@ -76,9 +76,10 @@ func judgeBreakdown(e *evidence.Evidence, s *chain.Spacing) rule.Finding {
 }
 
 // needlesTaken is what is taken for granted of electrodes that are not described, where it
-// matters: a sharp one against a blunt one stands less than a pair of needles.
+// matters: a sharp one against a blunt one stands less than a pair of needles. Where one is
+// said to be the sharper, its polarity judges and nothing is taken.
 func needlesTaken(s *chain.Spacing, x evidence.Spacing) []string {
-	if s.Shape != nil || x.Computed || s.Medium.V != "air" {
+	if s.Shape != nil || x.Computed || s.SharperElectrode.Set() || s.Medium.V == "printed board" || !inAir(s) {
 		return nil
 	}
 	least, err := insulation.AgainstPlane(x.Gap)
@@ -89,7 +90,7 @@ func needlesTaken(s *chain.Spacing, x evidence.Spacing) []string {
 	if err == nil {
 		text += "; a sharp positive one against a blunt one would stand " + quantity.Text(least.Value)
 	}
-	return []string{text + ": give spacing.shape"}
+	return []string{text + ": give spacing.shape or spacing.sharper_electrode"}
 }
 
 var coronaSource = rule.Source{Text: "highest voltage at most the onset estimate; corona makes ozone, noise and radio interference, it does not break a gap", Mark: rule.Practice}

@@ -119,15 +119,8 @@ func (e *Evidence) toleranced() []string {
 }
 
 func tolerance(el *circuit.Element) quantity.Fraction {
-	switch {
-	case el.ResistorPart != nil:
-		return el.ResistorPart.Tolerance.V
-	case el.CapacitorPart != nil:
-		return el.CapacitorPart.Tolerance.V
-	case el.LoosePart != nil:
-		return el.LoosePart.Tolerance.V
-	}
-	return 0
+	t, _ := toleranceOf(el)
+	return t.V
 }
 
 // PartOf is the described part of an element: "multiplier.diode.a.3" is one of

@@ -93,7 +93,7 @@ func (e *Evidence) held() (quantity.Voltage, error) {
 	if e.condition.Corner == Nominal {
 		return e.chain.Regulation.Set.V, nil
 	}
-	nominal := e.condition
+	nominal := e.Healthy().condition // its divider reads, whatever is thought away
 	nominal.Corner = Nominal
 	_, most, err := e.Under(nominal).HeldBetween()
 	return most, err

@@ -13,7 +13,7 @@ import (
 
 var waiting = rule.Rule{
 	ID: "discharge.waiting_time", Title: "Waiting time",
-	Demands: "After switching off, every node falls to 60 V through what is permanent within the stated waiting time.",
+	Demands: "After switching off, every node falls to 60 V through what is permanent within the stated waiting time, with every part at the high end of its tolerance too.",
 	Applies: "Where a node holds more charge or energy than may be touched.",
 	Margin:  "marginal where the waiting time is less than 1.25 times the time computed",
 	Concern: rule.Life,
@@ -36,7 +36,7 @@ func judgeWaiting(e *evidence.Evidence) rule.Judgement {
 		return *done
 	}
 	f.Place = access.WaitingTime.Place
-	slowest, under, err := slowestOf(e)
+	slowest, under, err := slowestOf(e, slow())
 	if err != nil {
 		return *only(f.Lacking(err))
 	}
@@ -52,22 +52,25 @@ func judgeWaiting(e *evidence.Evidence) rule.Judgement {
 		f.Because += "; no waiting time is stated"
 		return *only(f.Lacking(lack.Key(access.WaitingTime.Key)))
 	}
-	return *only(f.Least(rule.Of(access.WaitingTime.V), rule.Of(slowest.Time), limits.WaitingMargin).WithoutRemedyIfMet())
+	f = f.Least(rule.Of(access.WaitingTime.V), rule.Of(slowest.Time), limits.WaitingMargin)
+	return *only(f.Assume(exact(e, discharges)...).WithoutRemedyIfMet())
 }
 
-// slowestOf is the slowest discharge over all states.
-func slowestOf(e *evidence.Evidence) (evidence.Discharge, evidence.Condition, error) {
+// slowestOf is the slowest discharge over all states and some corners of the tolerances.
+func slowestOf(e *evidence.Evidence, corners []evidence.Corner) (evidence.Discharge, evidence.Condition, error) {
 	var worst evidence.Discharge
 	var under evidence.Condition
 	for _, state := range evidence.States {
-		c := e.Condition()
-		c.State = state
-		d, err := e.Under(c).SlowestDischarge()
-		if err != nil {
-			return d, c, err
-		}
-		if d.Slower(worst) {
-			worst, under = d, c
+		for _, corner := range corners {
+			c := e.Condition()
+			c.State, c.Corner = state, corner
+			d, err := e.Under(c).SlowestDischarge()
+			if err != nil {
+				return d, c, err
+			}
+			if d.Slower(worst) {
+				worst, under = d, c
+			}
 		}
 	}
 	return worst, under, nil
@@ -75,7 +78,7 @@ func slowestOf(e *evidence.Evidence) (evidence.Discharge, evidence.Condition, er
 
 var redundancy = rule.Rule{
 	ID: "bleeder.redundancy", Title: "Bleeder redundancy",
-	Demands: "At least two permanent strings to ground each discharge the chain alone within the waiting time.",
+	Demands: "At least two permanent strings to ground each discharge the chain alone within the waiting time, with every part at the high end of its tolerance.",
 	Applies: "Where a node holds more charge or energy than may be touched.",
 	Concern: rule.Life,
 	Sources: []rule.Source{limits.RedundancySource},
@@ -109,7 +112,7 @@ func judgeRedundancy(e *evidence.Evidence) rule.Judgement {
 	}
 	f.Because = fmt.Sprintf("permanent strings to ground that discharge the chain alone within %[3]s: %[1]d of %[2]d", good, all, quantity.Text(access.WaitingTime.V))
 	f.Remedy = "fit a second permanent bleeder string that meets the waiting time alone"
-	return *only(f.Least(count(good), count(2), 0).WithoutRemedyIfMet())
+	return *only(f.Least(count(good), count(2), 0).Assume(exact(e, discharges)...).WithoutRemedyIfMet())
 }
 
 func count(n int) rule.Amount { return rule.Amount{Value: float64(n), Unit: "1"} }
@@ -122,7 +125,7 @@ func countStrings(e *evidence.Evidence, within quantity.Time) (good, all int, er
 		}
 		c := e.Condition()
 		c.Fault = alone(el)
-		d, _, err := slowestOf(e.Under(c))
+		d, _, err := slowestOf(e.Under(c), []evidence.Corner{evidence.AllHigh})
 		if err != nil {
 			return 0, 0, err
 		}

@@ -3,6 +3,8 @@
 package people
 
 import (
+	"strings"
+
 	"kilovet/hv/chain"
 	"kilovet/hv/lack"
 	"kilovet/hv/quantity"
@@ -21,14 +23,17 @@ func delivers(s evidence.Short, v quantity.Voltage) (provided, needed rule.Amoun
 }
 
 // hazardous finds the first node that is above the touch voltage and not limited in
-// current, charge and energy, in any state. What is not known counts as not limited.
+// current, charge and energy, in any state, nominal or with every part at the high end of
+// its tolerance. What is not known counts as not limited.
 func hazardous(e *evidence.Evidence) (node string, found bool, err error) {
-	for _, state := range evidence.States {
-		in := e.Under(evidence.Condition{State: state})
-		for _, node := range in.Nodes() {
-			over, err := exceeds(in, node)
-			if err != nil || over {
-				return node, over, err
+	for _, corner := range slow() {
+		for _, state := range evidence.States {
+			in := e.Under(evidence.Condition{State: state, Corner: corner})
+			for _, node := range in.Nodes() {
+				over, err := exceeds(in, node)
+				if err != nil || over {
+					return node, over, err
+				}
 			}
 		}
 	}
@@ -67,7 +72,7 @@ func needsCare(e *evidence.Evidence, f rule.Finding) (*chain.Access, *rule.Judge
 		return nil, only(f.Lacking(err))
 	}
 	if !found {
-		over := rule.Over("no node delivers more than the touch limits")
+		over := rule.Over(strings.Join(append([]string{"no node delivers more than the touch limits"}, exact(e, holds)...), "; "))
 		return nil, &over
 	}
 	return e.Chain().Access, nil

@@ -38,10 +38,16 @@ func judgeRecharge(e *evidence.Evidence) rule.Judgement {
 	if done != nil {
 		return *done
 	}
-	f.Place, f.Under = access.Here(), string(evidence.Lost)
-	back, err := e.In(evidence.Lost).MostComesBack()
-	if err != nil {
-		return *only(f.Lacking(err))
+	f.Place = access.Here()
+	var back evidence.Return
+	for _, c := range evidence.LostCorners() {
+		b, err := e.Under(c).MostComesBack()
+		if err != nil {
+			return *only(f.Lacking(err))
+		}
+		if f.Under == "" || b.Voltage > back.Voltage {
+			back, f.Under = b, c.Text()
+		}
 	}
 	f.Because = fmt.Sprintf("up to %s come back at %s after a short discharge", quantity.Text(back.Voltage), back.Column)
 	f.Remedy = "leave the rod on, or short what was discharged, until the work is done"

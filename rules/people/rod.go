@@ -195,6 +195,6 @@ var rodEnergy = rule.Rule{
 		}
 		f.Under = most.Under.Text()
 		f.Because = fmt.Sprintf("the chain stores up to %s", quantity.Text(most.Value))
-		return *only(f.ShareOf(rule.Of(r.RatedEnergy.V)).Most(rule.Of(most.Value), rule.Of(r.RatedEnergy.V), limits.SinglePulse.Margin()).WithoutRemedyIfMet())
+		return *only(f.ShareOf(rule.Of(r.RatedEnergy.V)).Most(rule.Of(most.Value), rule.Of(r.RatedEnergy.V), limits.SinglePulse.Margin()).Assume(exact(e, holds)...).WithoutRemedyIfMet())
 	},
 }

@@ -44,7 +44,7 @@ func judgeTouch(e *evidence.Evidence) rule.Judgement {
 			continue
 		}
 		f.Subject, f.Place = node, access.Touchable.Place
-		j.Findings = append(j.Findings, touchable(e, node, f))
+		j.Findings = append(j.Findings, touchable(e, node, f).Assume(exact(e, at(e, node))...))
 	}
 	if len(j.Findings) == 0 {
 		return rule.Over("no node is within reach")

@@ -46,9 +46,9 @@ type Beside struct {
 func RunUnder(c *chain.Chain, inputs []Input, program Program, beside Beside) (*Review, document.Faults) {
 	e := evidence.New(c).Recorded(beside.Ripple).Without(beside.Without...).Telling(beside.Progress)
 	r := &Review{Program: program, Inputs: inputs, Heading: heading(c), Deference: deference}
-	var shown []exhibit.Table
+	var shown, exempt []exhibit.Table
 	parallel.Do(
-		func() { r.judge(e) },
+		func() { exempt = exemptTable(r.judge(e)) },
 		func() { r.Figures = figures(e) },
 		func() { r.Curves = curves(e) },
 		func() { shown = tables(e) },
@@ -56,7 +56,7 @@ func RunUnder(c *chain.Chain, inputs []Input, program Program, beside Beside) (*
 	if faults := r.under(beside.Limits, c); len(faults) > 0 {
 		return nil, faults
 	}
-	r.Tables = slices.Concat(dispositionTable(c, r.Findings), localTable(r.Local), shown)
+	r.Tables = slices.Concat(dispositionTable(c, r.Findings), localTable(r.Local), shown, exempt)
 	r.Diagram = diagram.Of(e, r.Findings)
 	r.Cautions = cautions(c)
 	r.Assumptions = assumptions(e, r.Findings)
@@ -66,21 +66,25 @@ func RunUnder(c *chain.Chain, inputs []Input, program Program, beside Beside) (*
 	return r, nil
 }
 
+// said is what one rule says.
+type said struct {
+	rule rule.Rule
+	rule.Judgement
+}
+
 // judge has every rule say what it has to say.
-func (r *Review) judge(e *evidence.Evidence) {
-	type said struct {
-		rule rule.Rule
-		rule.Judgement
-	}
+func (r *Review) judge(e *evidence.Evidence) []said {
 	var makers []func() []said
 	for _, f := range families() {
 		for _, rl := range f.rules {
 			makers = append(makers, func() []said { return []said{{rl, judged(e, f, rl)}} })
 		}
 	}
-	for _, s := range inTurn(makers...) {
+	all := inTurn(makers...)
+	for _, s := range all {
 		r.take(s.rule, s.Judgement)
 	}
+	return all
 }
 
 // judged is what a rule says, or that its family is left out.

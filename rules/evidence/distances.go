@@ -8,11 +8,11 @@ import (
 	"kilovet/insulation"
 )
 
-// DistanceFor is the gap of a spacing whose breakdown estimate is the highest voltage
-// across it over a share; its shape keeps its sharpest radius.
+// DistanceFor is the gap of a spacing whose breakdown estimate is the peak that it is
+// asked to stand over a share; its shape keeps its sharpest radius.
 func (e *Evidence) DistanceFor(s *chain.Spacing, share float64) (quantity.Length, error) {
 	return e.distance(s, fmt.Sprintf("breakdown %g", share), func(x Spacing) (quantity.Length, error) {
-		return insulation.ClearanceForBreakdown(x.Gap, x.Voltages.Peak/quantity.Voltage(share), x.Voltages.Sharp)
+		return insulation.ClearanceForBreakdown(x.Gap, x.Asked()/quantity.Voltage(share), x.Voltages.Sharp)
 	})
 }
 

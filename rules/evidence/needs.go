@@ -36,6 +36,18 @@ func (x Spacing) RadiusAtWork(v quantity.Voltage) (quantity.Length, error) {
 // Dimensioned is the peak that the class of insulation is dimensioned for.
 func (x Spacing) Dimensioned() quantity.Voltage { return x.Voltages.For(x.Gap.Class()).Peak }
 
+// Asked is the peak that the breakdown estimate is held against.
+func (x Spacing) Asked() quantity.Voltage { return x.Voltages.Peak * x.Step() }
+
+// Step is what the peak is multiplied by before it is held against the breakdown estimate:
+// in gases other than air, where no table has a safety step, that of the class of insulation.
+func (x Spacing) Step() quantity.Voltage {
+	if x.Gap.Medium == gap.InGas && x.Gap.Filling() != gap.AirGas {
+		return gap.Voltages{Peak: 1}.For(x.Gap.Class()).Peak
+	}
+	return 1
+}
+
 // IfNegative is what the spacing would stand with its sharper electrode negative, where
 // the polarity is not known.
 func (x Spacing) IfNegative() (quantity.Voltage, error) {

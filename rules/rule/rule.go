@@ -22,7 +22,11 @@ type Rule struct {
 type Judgement struct {
 	Findings   []Finding
 	PassedOver string
+	Exempt     []Exempt
 }
+
+// Exempt is a subject that a rule does not apply to, and why.
+type Exempt struct{ Subject, Because string }
 
 // Over is the judgement of a rule that does not apply.
 func Over(because string) Judgement { return Judgement{PassedOver: because} }

@@ -34,8 +34,12 @@ var annulus = rule.Rule{
 		var j rule.Judgement
 		for i := range e.Chain().Feedthroughs {
 			f := &e.Chain().Feedthroughs[i]
-			for _, a := range e.Annuli(f) {
+			annuli := e.Annuli(f)
+			for _, a := range annuli {
 				j.Findings = append(j.Findings, judgeAnnulus(e, f, a))
+			}
+			if len(annuli) == 0 {
+				j.Exempt = append(j.Exempt, rule.Exempt{Subject: f.Name.V, Because: "it has no annulus beside its sleeve"})
 			}
 		}
 		if j.Findings == nil {

@@ -17,7 +17,7 @@ var describedSource = rule.Source{Text: "what was not described cannot be judged
 
 var described = rule.Rule{
 	ID: "spacing.described", Title: "Every gap described",
-	Demands: "Every node above 1 kV to ground, every adjacent pair of stages, output to cathode, and the floating heater supply to mains has a spacing or is covered by a rated part.",
+	Demands: "Every node above 1 kV to ground, every adjacent pair of stages, output to cathode, and the floating heater supply to mains has a spacing or is covered by a rated part. A cable answers for its own insulation: where no spacing is described at its ends, that they are covered is an assumption.",
 	Applies: "Where a supply is described.",
 	Concern: rule.Life,
 	Sources: []rule.Source{describedSource},
@@ -42,19 +42,29 @@ func judgeDescribed(e *evidence.Evidence) rule.Judgement {
 		return rule.Judgement{Findings: []rule.Finding{all.Lacking(err)}}
 	}
 	var j rule.Judgement
+	missing := false
 	for _, p := range pairs {
-		if !covered(e, p) {
-			f := all
-			f.Subject, f.Concern = p.from+" to "+p.to, p.concern
+		f := all
+		f.Subject, f.Concern = p.from+" to "+p.to, p.concern
+		switch {
+		case spaced(e, p) || byFeed(e, p):
+		case cabled(e, p):
+			f.Because, f.Remedy = "the cable is rated between them", "describe a [[spacing]] between supply and ground"
+			j.Findings = append(j.Findings, f.Assume(bareEnds).There(true))
+		default:
+			missing = true
 			j.Findings = append(j.Findings, f.Lacking(lack.Because(fmt.Sprintf("no spacing is described between %s and %s", p.from, p.to), "spacing")))
 		}
 	}
-	if len(j.Findings) == 0 {
+	if !missing {
 		all.Because = fmt.Sprintf("all %d pairs of nodes that need one have a spacing or a rated part", len(pairs))
-		j.Findings = []rule.Finding{all.There(true)}
+		j.Findings = append(j.Findings, all.There(true))
 	}
 	return j
 }
+
+// bareEnds is what the rating of a cable does not answer for.
+const bareEnds = "the rating of the cable answers for its own insulation only: the bare metal at its ends, supply to ground, is taken to be covered"
 
 // pair is two nodes that need a spacing between them.
 type pair struct {
@@ -111,15 +121,20 @@ func same(e *evidence.Evidence, a, b string) bool {
 	return !ok || !ok2 || na == nb
 }
 
-// covered reports whether a spacing or a rated insulating part lies between a pair.
-func covered(e *evidence.Evidence, p pair) bool {
-	c := e.Chain()
-	if cable := c.Cable; cable != nil && cable.RatedVoltage.Set() && matches(e, p, "supply", "ground") {
-		return true
-	}
-	if h := c.Heater; h != nil && h.Feed != nil && h.Feed.RatedVoltage.Set() && matches(e, p, "cathode", "mains") {
-		return true
-	}
+// cabled reports whether a rated cable lies between a pair.
+func cabled(e *evidence.Evidence, p pair) bool {
+	cable := e.Chain().Cable
+	return cable != nil && cable.RatedVoltage.Set() && matches(e, p, "supply", "ground")
+}
+
+// byFeed reports whether a rated heater feed lies between a pair.
+func byFeed(e *evidence.Evidence, p pair) bool {
+	h := e.Chain().Heater
+	return h != nil && h.Feed != nil && h.Feed.RatedVoltage.Set() && matches(e, p, "cathode", "mains")
+}
+
+// spaced reports whether a described spacing lies between a pair.
+func spaced(e *evidence.Evidence, p pair) bool {
 	return slices.ContainsFunc(e.Spacings(), func(s *chain.Spacing) bool {
 		return s.From.Set() && slices.ContainsFunc(ends(s), func(from string) bool { return matches(e, p, from, s.To.V) })
 	})

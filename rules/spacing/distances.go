@@ -69,7 +69,7 @@ func inAir(s *chain.Spacing) bool {
 
 // classTaken is what is taken for granted where a spacing does not say what it has to do.
 func classTaken(s *chain.Spacing) []string {
-	if s.Insulation.Set() || s.Medium.V == "vacuum" || otherGas(s) {
+	if s.Insulation.Set() || s.Medium.V == "vacuum" {
 		return nil
 	}
 	return []string{"insulation is basic where the spacing does not say; reinforced asks for more"}

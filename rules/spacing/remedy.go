@@ -81,7 +81,7 @@ func wider(s *chain.Spacing, given document.Given[quantity.Length], need quantit
 // againstBreakdown are the sizes at which the peak is the comfortable share of what a
 // spacing stands: a distance, a length of surface, a radius.
 func againstBreakdown(s *chain.Spacing, x evidence.Spacing) string {
-	v := x.Voltages.Peak / limits.BreakdownComfort
+	v := x.Asked() / limits.BreakdownComfort
 	var ways []string
 	if s.Clearance.Set() {
 		if d, err := x.GapFor(v); err == nil {

@@ -33,6 +33,7 @@ func each(e *evidence.Evidence, judge func(*chain.Spacing) (rule.Finding, string
 		f, over := judge(s)
 		if over != "" {
 			j.PassedOver = over
+			j.Exempt = append(j.Exempt, rule.Exempt{Subject: s.Name.V, Because: over})
 			continue
 		}
 		j.Findings = append(j.Findings, told(f, s))

@@ -16,7 +16,7 @@ var breakdownSource = rule.Source{Text: "highest voltage at most 80 % of the bre
 
 var breakdown = rule.Rule{
 	ID: "spacing.breakdown", Title: "Breakdown of the gap",
-	Demands: "The highest voltage stays at or below 80 % of the voltage at which the gap is expected to break down.",
+	Demands: "The highest voltage stays at or below 80 % of the voltage at which the gap is expected to break down; in gases other than air, where no table asks for a clearance, 160 % of it for reinforced insulation.",
 	Applies: "Every spacing.",
 	Margin:  "marginal above 50 % of the estimate",
 	Concern: rule.Life,
@@ -51,7 +51,7 @@ func judgeBreakdown(e *evidence.Evidence, s *chain.Spacing) rule.Finding {
 	}
 	stands := x.Assessment.Breakdown
 	if stands.Lack != nil || beyondBound(x) {
-		return unanswered(f, x)
+		return classed(s, x, unanswered(f, x))
 	}
 	f.Under = x.Under.Text()
 	f.Sources = append(append(rule.Cited(stands.Sources), breakdownSource), shown(stands.Answer)...)
@@ -63,7 +63,8 @@ func judgeBreakdown(e *evidence.Evidence, s *chain.Spacing) rule.Finding {
 	remarks, cited := x.Remarks()
 	f.Because = strings.Join(append([]string{f.Because}, remarks...), "; ")
 	f.Sources = append(f.Sources, rule.Cited(cited)...)
-	limit := stands.Value * limits.BreakdownShare
+	f = classed(s, x, f)
+	limit := stands.Value * usable(x)
 	f = f.ShareOf(rule.Of(stands.Value)).Most(rule.Of(x.Voltages.Peak), rule.Of(limit), limits.BreakdownShare/limits.BreakdownComfort-1).Assume(stands.Assumptions...).Assume(needlesTaken(s, x)...)
 	switch {
 	case f.Verdict == rule.Meets:

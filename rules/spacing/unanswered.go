@@ -14,7 +14,7 @@ import (
 // beyondBound reports whether a peak lies above what is only a lower bound of the breakdown.
 func beyondBound(x evidence.Spacing) bool {
 	stands := x.Assessment.Breakdown
-	return stands.AtLeast && !quantity.AtMost(x.Voltages.Peak, stands.Value*limits.BreakdownShare)
+	return stands.AtLeast && !quantity.AtMost(x.Voltages.Peak, stands.Value*usable(x))
 }
 
 // unanswered judges a gap whose breakdown no law gives at its distance by its bounds: it
@@ -31,17 +31,17 @@ func unanswered(f rule.Finding, x evidence.Spacing) rule.Finding {
 	stands := func(at quantity.Voltage, how, because string, comfort float64) rule.Finding {
 		f.Under = x.Under.Text()
 		f.Because = fmt.Sprintf("%s across a gap that stands at %s %s (%s)", quantity.Text(v), how, quantity.Text(at), because)
-		return f.ShareOf(rule.Of(at)).Most(rule.Of(v), rule.Of(at*limits.BreakdownShare), comfort)
+		return f.ShareOf(rule.Of(at)).Most(rule.Of(v), rule.Of(at*usable(x)), comfort)
 	}
 	switch {
-	case b.Least.Lack == nil && quantity.AtMost(v, b.Least.Value*limits.BreakdownShare):
+	case b.Least.Lack == nil && quantity.AtMost(v, b.Least.Value*usable(x)):
 		f.Sources = append(rule.Cited(b.Least.Sources), breakdownSource)
 		f = stands(b.Least.Value, "least", b.Least.Because, limits.BreakdownShare/limits.BreakdownComfort-1).Assume(b.Least.Assumptions...)
 		if f.Verdict != rule.Meets {
 			f.Remedy = alternatives("lower the voltage", confirm)
 		}
 		return f
-	case b.Most.Lack == nil && !quantity.AtMost(v, b.Most.Value*limits.BreakdownShare):
+	case b.Most.Lack == nil && !quantity.AtMost(v, b.Most.Value*usable(x)):
 		f.Sources = append(rule.Cited(b.Most.Sources), breakdownSource)
 		f = stands(b.Most.Value, "most", b.Most.Because, 0)
 		f.Remedy = "widen the gap or take a stronger medium, or lower the voltage"

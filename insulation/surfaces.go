@@ -62,14 +62,18 @@ func named(g gap.Gap) string {
 // hexafluoride more than twice (its critical field against that of air).
 func noWeaker(g gap.Gas) bool { return g == gap.Nitrogen || g == gap.SulphurHexafluoride }
 
-const normalPressure quantity.Pressure = 101325
+const (
+	normalPressure quantity.Pressure = 101325
+	// tablePressure is that of the air which the printed tables hold for, 2000 m.
+	tablePressure quantity.Pressure = 80e3
+)
 
 // alongInGas is the creepage of a surface in a gas other than air: from a tested pair
-// where one was given; else, in nitrogen and sulphur hexafluoride at normal pressure or
+// where one was given; else, in nitrogen and sulphur hexafluoride at 80 kPa or
 // above, as in air of the same pollution degree, which tracks no less. In other gases, and
 // in thinner ones, there is a lack.
 func alongInGas(g gap.Gap, v gap.Voltages) (gap.Answer[quantity.Length], error) {
-	if g.Tested.Voltage > 0 || !noWeaker(g.Filling()) || !quantity.AtLeast(g.TruePressure(), normalPressure) {
+	if g.Tested.Voltage > 0 || !noWeaker(g.Filling()) || !quantity.AtLeast(g.TruePressure(), tablePressure) {
 		return alongTested(g, v.For(g.Class()))
 	}
 	group, source, err := groupOf(g)
@@ -82,6 +86,6 @@ func alongInGas(g gap.Gap, v gap.Voltages) (gap.Answer[quantity.Length], error) 
 		inAir.Altitude = new(quantity.Length)
 	}
 	a, err := creepageOf(inAir, v, group, source)
-	a.Assumptions = append(a.Assumptions, "a surface in "+string(g.Filling())+" at normal pressure or above needs what it needs in air of the same pollution degree")
+	a.Assumptions = append(a.Assumptions, "a surface in "+string(g.Filling())+" at 80 kPa or above needs what it needs in air of the same pollution degree")
 	return a, err
 }

@@ -51,7 +51,7 @@ func judgeBreakdown(e *evidence.Evidence, s *chain.Spacing) rule.Finding {
 	}
 	stands := x.Assessment.Breakdown
 	if stands.Lack != nil || beyondBound(x) {
-		return classed(s, x, unanswered(f, x))
+		return classed(s, x, unanswered(f, s, x))
 	}
 	f.Under = x.Under.Text()
 	f.Sources = append(append(rule.Cited(stands.Sources), breakdownSource), shown(stands.Answer)...)
@@ -131,7 +131,11 @@ func judgeCorona(e *evidence.Evidence, s *chain.Spacing) (rule.Finding, string) 
 	if onset.Lack != nil {
 		least, err := x.OnsetAtLeast()
 		if err != nil || x.Computed || !quantity.AtMost(x.Voltages.Peak, least.Value) {
-			return f.Lacking(onset.Lack), ""
+			f = f.Lacking(onset.Lack)
+			if len(f.Missing) == 0 && !x.Computed && s.Clearance.Set() {
+				f.Remedy = measured(s, "at which voltage a discharge begins in this gap", "keep the peak under it")
+			}
+			return f, ""
 		}
 		onset.Answer = least
 	}

@@ -3,6 +3,7 @@ package spacing
 import (
 	"fmt"
 
+	"kilovet/hv/chain"
 	"kilovet/hv/lack"
 	"kilovet/hv/quantity"
 	"kilovet/insulation"
@@ -19,7 +20,7 @@ func beyondBound(x evidence.Spacing) bool {
 
 // unanswered judges a gap whose breakdown no law gives at its distance by its bounds: it
 // holds under the lower, fails above the upper and is unassessed between.
-func unanswered(f rule.Finding, x evidence.Spacing) rule.Finding {
+func unanswered(f rule.Finding, s *chain.Spacing, x evidence.Spacing) rule.Finding {
 	why := x.Assessment.Breakdown.Lack
 	if why == nil {
 		why = lack.Failed("only a lower bound of the breakdown is known")
@@ -48,7 +49,23 @@ func unanswered(f rule.Finding, x evidence.Spacing) rule.Finding {
 		return f
 	}
 	f.Because = within(v, b)
-	return f.Lacking(why)
+	f = f.Lacking(why)
+	if len(f.Missing) == 0 && s.Clearance.Set() {
+		f.Remedy = measured(s, "at which voltage this gap breaks down", "keep the peak under 80 % of it")
+	}
+	return f
+}
+
+// measured says what to measure where no law answers, and what else would do.
+func measured(s *chain.Spacing, what, then string) string {
+	in, other := s.Medium.V, ""
+	if s.Medium.V == "gas" {
+		in = s.Gas.Or("air") + " at " + quantity.Text(s.Pressure.V)
+		if otherGas(s) && s.Gas.V != "sulphur hexafluoride" {
+			other = ", or take air or sulphur hexafluoride, whose laws are known"
+		}
+	}
+	return fmt.Sprintf("measure %s in %s and %s%s", what, in, then, other)
 }
 
 // within says what the bounds leave open.

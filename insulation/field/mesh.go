@@ -5,13 +5,13 @@ import (
 )
 
 const (
-	grade      = 0.25        // next panel's length towards an irregular end, relative
+	grade      = 0.2         // next panel's length towards an irregular end, relative
 	nearness   = 1.5         // a panel is no longer than this times its distance to an irregular point
 	bend       = math.Pi / 2 // most an arc panel turns
 	longRadius = 5           // a natural boundary's panel spans radii up to this ratio
 	precision  = 1e-5        // what may be lost where grading stops
 	shortest   = 1e-7        // no panel is shorter, or rounding would show
-	coarsest   = 1e-4        // length at which it stops, at most
+	coarsest   = 2e-4        // length at which it stops, at most
 	kinkFloor  = 1e-5        // where grading towards a jump of curvature stops
 )
 

@@ -20,7 +20,7 @@ type Work struct {
 
 const (
 	maxPanels   = 220
-	maxUnknowns = 1700
+	maxUnknowns = 2400
 	// worstClosure bounds how far the flux of a constant potential through the rim of
 	// a region may miss its exact value: it shows outlines that do not close and
 	// panels too long for their distance.

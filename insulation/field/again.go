@@ -62,7 +62,7 @@ func (s *Solution) Passing(over quantity.Time) (*Solution, error) {
 	if faults := m.build(); len(faults) > 0 {
 		return nil, faults
 	}
-	return s.again(m)
+	return s.againBy(m, Rough)
 }
 
 func (s *Solution) copied() *Arrangement {
@@ -73,12 +73,19 @@ func (s *Solution) copied() *Arrangement {
 
 // again solves a model that differs in its constants from the division of this one, with
 // the integrals that were done for it.
-func (s *Solution) again(m *model) (*Solution, error) {
+func (s *Solution) again(m *model) (*Solution, error) { return s.againBy(m, Aim(s.aim)) }
+
+// againBy is again with another aim: a rougher one goes on from the last division, which
+// mostly serves it, a fine one from the last but one, to see what the last changes.
+func (s *Solution) againBy(m *model, aim Aim) (*Solution, error) {
 	if !s.samePlane(m) {
-		return m.solution(Aim(s.aim))
+		return m.solution(aim)
 	}
 	next := newSolver(m)
-	next.blocks, next.made, next.aim = maps.Clone(s.blocks), s.made, s.aim
+	next.blocks, next.made, next.aim = maps.Clone(s.blocks), s.made, float64(aim)
+	if aim > Fine {
+		return next.solution(s.fine.panels)
+	}
 	return next.solution(s.coarse.panels)
 }
 

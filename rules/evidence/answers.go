@@ -89,10 +89,10 @@ type tried struct {
 func (e *Evidence) answer(f *build.Arrangement, d build.Dimension, weak Weak, asked float64) Answer {
 	a := Answer{Dimension: d}
 	v := d.Value * littleStep
-	t, err := e.try(d, v, weak, field.Fine)
+	t, err := e.try(d, v, weak, (*field.Solution).Moved, field.Fine)
 	if err != nil {
 		v = d.Value / littleStep
-		if t, err = e.try(d, v, weak, field.Fine); err != nil {
+		if t, err = e.try(d, v, weak, (*field.Solution).Moved, field.Fine); err != nil {
 			a.Err = err
 			return a
 		}
@@ -120,7 +120,7 @@ func (e *Evidence) search(d build.Dimension, weak Weak, asked, power float64) (q
 		if !(next < resizedMost*float64(d.Value) && next > float64(d.Value)/resizedMost) {
 			return 0, lack.Range("not even a fourth or four times as much is enough")
 		}
-		t, err := e.try(d, quantity.Length(next), weak, field.Rough)
+		t, err := e.try(d, quantity.Length(next), weak, (*field.Solution).MovedFar, field.Rough)
 		if err != nil {
 			return 0, err
 		}
@@ -135,14 +135,13 @@ func (e *Evidence) search(d build.Dimension, weak Weak, asked, power float64) (q
 	return 0, lack.Failed("not found within %d solutions", mostTries)
 }
 
+// mover is a way to the field of outlines with other lengths.
+type mover func(*field.Solution, field.Arrangement, field.Aim) (*field.Solution, error)
+
 // try solves an arrangement with another dimension under the same voltages.
-func (e *Evidence) try(d build.Dimension, v quantity.Length, weak Weak, aim field.Aim) (tried, error) {
+func (e *Evidence) try(d build.Dimension, v quantity.Length, weak Weak, by mover, aim field.Aim) (tried, error) {
 	f := d.With(v)
-	by := aim.Solve
-	if weak.Settled {
-		by = aim.SolveResistive
-	}
-	s, err := solveBy(f, by)
+	s, err := solveBy(f, func(a field.Arrangement) (*field.Solution, error) { return by(weak.Field.Solution, a, aim) })
 	if err != nil {
 		return tried{}, err
 	}

@@ -2,6 +2,7 @@ package rules
 
 import (
 	"kilovet/hv/chain"
+	"kilovet/hv/quantity"
 	"kilovet/rules/rule"
 )
 
@@ -45,6 +46,10 @@ var warnings = []warning{
 		rule.Caution{Subject: "heater", Text: "The heater supply floats at the full voltage: knobs, leads and batteries of it are live."}},
 	{func(c *chain.Chain, _ map[string]bool) bool { return c.Heater != nil || c.Gun != nil },
 		rule.Caution{Subject: "filament", Text: "Do not vent over a hot filament: let it cool first. It glows, and sends electrons, as long as the heater is on."}},
+	{func(c *chain.Chain, _ map[string]bool) bool {
+		return c.Divider != nil && c.Divider.Upper != nil && c.Divider.Upper.Total() > leaky
+	},
+		rule.Caution{Subject: "divider", Text: "Beside a divider of more than 10 GΩ what leaks over its surface, its board and its lead counts too, and dirt and damp change it: it reads wrong without anything having failed. Keep it clean and dry or cast in, guard its low end, and prove it against another meter."}},
 	{func(_ *chain.Chain, in map[string]bool) bool { return in["oil"] },
 		rule.Caution{Subject: "oil", Text: "Oil burns and spreads; air bubbles and water ruin it after every refill. Let it rest before switching on."}},
 	{func(_ *chain.Chain, in map[string]bool) bool { return in["sulphur hexafluoride"] },
@@ -54,6 +59,10 @@ var warnings = []warning{
 	{func(_ *chain.Chain, in map[string]bool) bool { return in["beryllium"] },
 		rule.Caution{Subject: "beryllium", Text: "Dust of a beryllium window is poisonous: never scratch, sand or sweep it."}},
 }
+
+// leaky is the divider beside which leakage over surfaces counts: common practice, no
+// source.
+const leaky quantity.Resistance = 10e9
 
 // evacuated reports whether something of the chain stands in vacuum.
 func evacuated(c *chain.Chain, in map[string]bool) bool {

@@ -37,7 +37,7 @@ func closedForm(e *evidence.Evidence) []exhibit.Table {
 	noLoad, _ := e.NoLoad()
 	row("mean", noLoad-estimate, none, mean, nil)
 	row("drop", estimate, none, drop.Total, nil)
-	row("drop, load alone", estimate, none, drop.Load, drop.Split)
+	row("drop, load alone", estimate, none, drop.Load, first(drop.Split, drop.Rest))
 	swing, none := e.RippleEstimate()
 	row("ripple, peak to peak", swing, none, ripple, nil)
 	row("ripple, load alone", swing, none, drop.RippleIdeal, drop.Split)
@@ -54,7 +54,7 @@ func gapInWords(e *evidence.Evidence, drop evidence.Drop) string {
 		text += fmt.Sprintf(", a diode conducts for up to %s of the period", quantity.Text(d))
 	}
 	estimate, err := e.DropEstimate()
-	if err != nil || drop.Split != nil {
+	if first(err, drop.Split, drop.Rest) != nil {
 		return text
 	}
 	text += fmt.Sprintf("; of the %s between the two drops, pulses of finite length make %s, strays, junctions and leakage %s, source and diode resistance %s",
@@ -71,7 +71,7 @@ func dropByCause(e *evidence.Evidence) []exhibit.Table {
 		return nil
 	}
 	d, err := e.Drop()
-	if err != nil || d.Split != nil {
+	if first(err, d.Split, d.Rest) != nil {
 		return nil
 	}
 	t := exhibit.Table{

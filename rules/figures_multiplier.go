@@ -14,7 +14,7 @@ func multiplier(c *collector, e *evidence.Evidence) {
 	of(c, "multiplier.minimum", "", basis, e.MultiplierMinimum)
 	if d, err := e.Drop(); err == nil {
 		add(c, "multiplier.drop", "", basis, d.Total, nil)
-		add(c, "multiplier.drop_load", "", basis, d.Load, d.Split)
+		add(c, "multiplier.drop_load", "", basis, d.Load, first(d.Split, d.Rest))
 		add(c, "multiplier.drop_stray", "", basis, d.Stray, d.Split)
 		add(c, "multiplier.drop_source", "", basis, d.Source, d.Split)
 	}

@@ -55,8 +55,14 @@ func (p *Periodic) swing(s *span) Swing {
 		w.Least, w.Greatest = y.widen(p.track.steps[k].euler, w.Least, w.Greatest)
 	}
 	w.Mean = quantity.Voltage(s.offset.direct + sum/p.track.period) // a sine and a square wave have none
+	if math.Abs(float64(w.Mean)) < nought*float64(w.Peak()) {
+		w.Mean = 0
+	}
 	return w
 }
+
+// nought is the share of the peak below which a mean is only what the sum leaves behind.
+const nought = 1e-9
 
 // samples are a quantity at the start and the stages of a step.
 type samples [4]float64

@@ -49,8 +49,9 @@ type Drop struct {
 	// Ripple at the top, peak to peak, of the circuit without what opposes the drive, and
 	// of that without strays as well: what the closed form is to be compared with.
 	RippleStiff, RippleIdeal quantity.Voltage
-	// Split is the reason why the drop could not be split; nil where it was.
-	Split error
+	// Split is the reason why the drop could not be split, Rest why what the load takes
+	// is not told apart; nil where they are.
+	Split, Rest error
 }
 
 // Drop is the drop of the multiplier. It is split by solving the circuit again
@@ -88,6 +89,9 @@ func (e *Evidence) split(d *Drop, mean quantity.Voltage) error {
 	d.Source, d.Stray = magnitude(withStrays.Mean)-mean, magnitude(ideal.Mean)-magnitude(withStrays.Mean)
 	d.RippleStiff, d.RippleIdeal = withStrays.PeakToPeak(), ideal.PeakToPeak()
 	d.Load = d.Total - d.Source - d.Stray
+	if d.Load < 0 && e.chain.Drive.Unbalance.V > 0 {
+		d.Rest = lack.Failed("the stronger half of the drive raises the output by more than the load takes: what the load takes of the drop is not told apart")
+	}
 	return nil
 }
 

@@ -34,7 +34,7 @@ var computed = rule.Rule{
 			{Rule: "fault.computed", Subject: "bias.bypass shorted", Verdict: rule.Unassessed},
 			{Rule: "fault.computed", Subject: "bias.clamp shorted", Verdict: rule.Unassessed},
 			{Rule: "gun.emission_law", Subject: "gun"},
-			{Rule: "gun.regulation", Subject: "gun"},
+			{Rule: "gun.regulation", Subject: "gun", Verdict: rule.Unassessed},
 		},
 	},
 	Judge: judgeComputed,

@@ -3,6 +3,7 @@ package optics
 import (
 	"fmt"
 
+	"kilovet/hv/document"
 	"kilovet/hv/quantity"
 	"kilovet/rules/evidence"
 	"kilovet/rules/limits"
@@ -64,7 +65,7 @@ var slowSource = rule.Source{Text: "what is too slow to blur defocuses the spot 
 var hum = rule.Rule{
 	ID: "beam.hum", Title: "Hum in a scanned image",
 	Demands: "What is slower than the dwell, hum first of all, neither defocuses the spot nor moves the edge of the field by more than the blur allowance.",
-	Applies: "Where dwell and blur allowance are stated and something is slower than the dwell.",
+	Applies: "Where a blur allowance is stated and something is slower than the dwell.",
 	Margin:  "marginal with less than 10 % in hand",
 	Concern: rule.Performance,
 	Sources: []rule.Source{slowSource},
@@ -78,11 +79,11 @@ field_width          = "1 mm"`}},
 		if why := noAllowance(e); why != "" {
 			return rule.Over(why)
 		}
-		if !b.Dwell.Set() {
-			return rule.Over("no dwell is stated")
-		}
 		f := rule.Finding{Rule: "beam.hum", Subject: "hum", Concern: rule.Performance, Relation: rule.AtMost, Place: b.Dwell.Place,
 			Under: string(evidence.Working), Sources: []rule.Source{slowSource}, Remedy: "screen the heater feed, balance its common mode, add capacitance at the cathode, or scan in step with the mains"}
+		if err := document.Need(b.Dwell); err != nil {
+			return rule.One(f.Lacking(err))
+		}
 		s, err := e.BandingWithin()
 		if err != nil {
 			return rule.One(f.Lacking(err))

@@ -144,7 +144,7 @@ var regulationSource = rule.Source{Text: "self-bias regulates where it takes awa
 var regulating = rule.Rule{
 	ID: "gun.regulation", Title: "Self-bias that regulates",
 	Demands: "The bias resistor takes away at least half of a slow disturbance of the emission.",
-	Applies: "Where the gun is self-biased and its cutoff is known.",
+	Applies: "Where the gun is self-biased.",
 	Margin:  "marginal where less than two thirds are taken away",
 	Concern: rule.Performance,
 	Sources: []rule.Source{regulationSource},
@@ -160,11 +160,11 @@ var regulating = rule.Rule{
 		if c.Bias == nil || c.Bias.Kind.V != "self" {
 			return rule.Over("the gun is not self-biased")
 		}
-		if _, err := e.Cutoff(); err != nil {
-			return rule.Over("the cutoff of the gun is not known: " + err.Error())
-		}
 		f := rule.Finding{Rule: "gun.regulation", Subject: "gun", Concern: rule.Performance, Relation: rule.AtLeast, Place: c.Bias.Here(),
 			Under: string(evidence.Working), Sources: []rule.Source{regulationSource}, Remedy: "a larger bias resistor, nearer to cutoff"}
+		if _, err := e.Cutoff(); err != nil {
+			return rule.One(f.Lacking(err))
+		}
 		r, err := e.GunRegulation()
 		if err != nil {
 			return rule.One(f.Lacking(err))

@@ -60,8 +60,13 @@ var emissionLaw = rule.Rule{
 		if why := noGun(e); why != "" {
 			return rule.Over(why)
 		}
-		if !g.Emission.Set() || !g.Cutoff.Set() || !g.ZeroBiasEmission.Set() || e.Chain().Bias == nil {
-			return rule.Over("there is no emission to compare with a law")
+		switch {
+		case !g.Emission.Set():
+			return rule.Over("no emission is stated: it is that of the law")
+		case e.Chain().Bias == nil:
+			return rule.Over("the gun has no bias that a law of the emission could go by")
+		case !g.Cutoff.Set() || !g.ZeroBiasEmission.Set():
+			return rule.Over("the law has no cutoff or no scale of its own (gun.cutoff, gun.zero_bias_emission): the stated emission sets it, and nothing is left to compare")
 		}
 		f := rule.Finding{Rule: "gun.emission_law", Subject: "gun", Concern: rule.Performance, Relation: rule.AtMost, Place: g.Emission.Place,
 			Under: string(evidence.Working), Sources: []rule.Source{lawSource}, Remedy: "correct the emission, the cutoff, the scale of the law or the bias resistor"}
@@ -80,7 +85,7 @@ var limitSource = rule.Source{Text: "Richardson's law for the emitting area at i
 var emissionLimit = rule.Rule{
 	ID: "gun.emission_limit", Title: "Emission against the cathode's limit",
 	Demands: "The emission is at most what the emitting area gives at its temperature.",
-	Applies: "Where emitting area, cathode temperature and work function are given.",
+	Applies: "Where a gun is fitted.",
 	Margin:  "marginal above 80 % of the limit",
 	Concern: rule.Performance,
 	Sources: []rule.Source{limitSource},
@@ -93,11 +98,12 @@ var emissionLimit = rule.Rule{
 		if why := noGun(e); why != "" {
 			return rule.Over(why)
 		}
-		if document.Need(g.EmittingArea, g.CathodeTemperature, g.WorkFunction) != nil {
-			return rule.Over("the limit of the cathode is not described")
-		}
 		f := rule.Finding{Rule: "gun.emission_limit", Subject: "gun", Concern: rule.Performance, Relation: rule.AtMost, Place: g.EmittingArea.Place,
 			Under: string(evidence.Working), Sources: []rule.Source{limitSource}, Remedy: "correct emission, area or temperature; a hotter cathode lives shorter"}
+		if err := document.Need(g.EmittingArea, g.CathodeTemperature, g.WorkFunction); err != nil {
+			f.Place = g.Here()
+			return rule.One(f.Lacking(err))
+		}
 		limit, err := e.RichardsonLimit()
 		if err != nil {
 			return rule.One(f.Lacking(err))

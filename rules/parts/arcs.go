@@ -54,8 +54,8 @@ func judgeArcVoltage(e *evidence.Evidence, g group) rule.Finding {
 
 var arcEnergy = rule.Rule{
 	ID: "series.arc_energy", Title: "Series resistors in an arc: energy",
-	Demands: "Each series resistor between stored charge and gun takes the share of the stored energy that an arc at output or cathode turns into heat in it.",
-	Applies: "Filter and gun-end resistors, loose ones in the lead, and a bias resistor without a clamp, regulation lost. What the drive feeds in while an arc stands is shown apart.",
+	Demands: "Each series resistor between stored charge and gun takes what an arc at output or cathode turns into heat in it.",
+	Applies: "Filter and gun-end resistors, loose ones in the lead, and a bias resistor without a clamp, regulation lost: the larger of what the stored charge alone leaves in it and what an arc does with the drive on, over 20 periods. What the drive goes on feeding in while an arc stands is shown apart, as a power.",
 	Margin:  limits.SinglePulse.Comfort("the single-pulse rating"),
 	Concern: rule.Equipment,
 	Sources: []rule.Source{limits.ArcSource, limits.SinglePulse.Source},

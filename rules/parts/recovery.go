@@ -4,6 +4,7 @@ import (
 	"fmt"
 
 	"kilovet/hv/document"
+	"kilovet/hv/lack"
 	"kilovet/hv/quantity"
 	"kilovet/rules/evidence"
 	"kilovet/rules/limits"
@@ -13,7 +14,7 @@ import (
 var diodeRecovery = rule.Rule{
 	ID: "diode.recovery", Title: "Reverse recovery of the diodes",
 	Demands: "The recovery time of a diode is at most a tenth of half a period of the drive.",
-	Applies: "Where the multiplier's diode states a recovery time.",
+	Applies: "Where a multiplier is described.",
 	Margin:  "marginal above a fiftieth",
 	Concern: rule.Performance,
 	Sources: []rule.Source{limits.RecoverySource},
@@ -23,11 +24,15 @@ var diodeRecovery = rule.Rule{
 	},
 	Judge: func(e *evidence.Evidence) rule.Judgement {
 		m := e.Chain().Multiplier
-		if m == nil || m.Diode == nil || !m.Diode.RecoveryTime.Set() {
-			return rule.Over("no recovery time is stated")
+		if m == nil {
+			return rule.Over("no multiplier is described")
 		}
 		f := rule.Finding{Rule: "diode.recovery", Subject: "multiplier.diode", Concern: rule.Performance, Relation: rule.AtMost,
-			Place: m.Diode.RecoveryTime.Place, Sources: []rule.Source{limits.RecoverySource}, Remedy: "use faster diodes or a lower frequency"}
+			Place: m.Here(), Sources: []rule.Source{limits.RecoverySource}, Remedy: "use faster diodes or a lower frequency"}
+		if m.Diode == nil || !m.Diode.RecoveryTime.Set() {
+			return rule.One(f.Lacking(lack.Key("multiplier.diode.recovery_time")))
+		}
+		f.Place = m.Diode.RecoveryTime.Place
 		return rule.Judgement{Findings: []rule.Finding{judgeRecovery(e.Chain().Drive.Frequency, m.Diode.RecoveryTime, f)}}
 	},
 }

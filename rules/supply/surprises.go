@@ -46,7 +46,10 @@ func judgeStrays(e *evidence.Evidence, m *chain.Multiplier) rule.Finding {
 	if err != nil || err2 != nil {
 		return f.Lacking(firstOf(err, err2))
 	}
-	f.Because = fmt.Sprintf("strays, junction capacitance and leakage take %s of %s, the load %s", quantity.Text(d.Stray), quantity.Text(none), quantity.Text(d.Load))
+	f.Because = fmt.Sprintf("strays, junction capacitance and leakage take %s of %s", quantity.Text(d.Stray), quantity.Text(none))
+	if d.Rest == nil {
+		f.Because += ", the load " + quantity.Text(d.Load)
+	}
 	if unknown := notGiven(m); len(unknown) > 0 {
 		f.Because += picofarad(e)
 		for _, key := range unknown {

@@ -187,12 +187,12 @@ func bodyTable(e *evidence.Evidence) []exhibit.Table {
 	t := exhibit.Table{
 		ID: "energy.body", Subject: node, Chapter: exhibit.Energy, Title: "What a body would take at " + node, Basis: "discharge of a capacitance through a resistance",
 		Columns: []exhibit.Column{{Head: "body"}, {Head: "resistance", Unit: "Ω"}, {Head: "peak current", Unit: "A"}, {Head: "lasting", Unit: "s"}, {Head: "charge", Unit: "C"}, {Head: "energy", Unit: "J"}, {Head: "source"}, {Head: "zone"}},
-		Note:    under(e) + "Information, never a permission: no current through a body is permitted by it. Lasting is the duration 3 R C that counts. Zones: " + touch.ZoneSource + ".",
+		Note:    under(e) + "Information, never a permission: no current through a body is permitted by it. Lasting is the duration 3 R C that counts. Zones: " + touch.ZoneSource + "; impulses beside the " + touch.ThresholdSource + ", since the curves of IEC 60479-2 were not seen.",
 	}
 	for _, b := range touch.Bodies() {
 		if s, err := e.Shock(node, b); err == nil {
 			t.Rows = append(t.Rows, []exhibit.Cell{exhibit.Words(b.Name), exhibit.Number(b.Resistance), exhibit.Number(s.Peak), exhibit.Number(s.Duration),
-				exhibit.Number(s.Charge), exhibit.Number(s.Energy), exhibit.Words(b.Source + " (" + b.Mark + ")"), exhibit.Words("an impulse: curves not seen")})
+				exhibit.Number(s.Charge), exhibit.Number(s.Energy), exhibit.Words(b.Source + " (" + b.Mark + ")"), exhibit.Words(ofThreshold(s))})
 		}
 	}
 	if i, err := e.TouchCurrent(node); err == nil {
@@ -200,4 +200,13 @@ func bodyTable(e *evidence.Evidence) []exhibit.Table {
 			exhibit.Words("–"), exhibit.Words("–"), exhibit.Words("the steady state with 2 kΩ at the node"), exhibit.Words(touch.ZoneOfDC(i))})
 	}
 	return table(t)
+}
+
+// ofThreshold says what share of the charge model's threshold an impulse is.
+func ofThreshold(s touch.Shock) string {
+	most, err := touch.ThresholdCharge(s.Duration)
+	if err != nil {
+		return "an impulse: " + err.Error()
+	}
+	return "an impulse: " + quantity.Text(quantity.Fraction(s.Charge/most)) + " of the charge from which a heart can fibrillate"
 }

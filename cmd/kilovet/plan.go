@@ -57,7 +57,9 @@ func (p *planning) run(args []string) error {
 	if err != nil {
 		return err
 	}
-	made, err := plan.Of(evidence.New(c))
+	progress := p.progress()
+	made, err := plan.Of(evidence.New(c).Telling(progress.tell))
+	progress.end()
 	if err != nil {
 		return exitf(unsound, "nothing to plan: %v", err)
 	}

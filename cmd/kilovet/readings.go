@@ -48,6 +48,7 @@ func (w world) compareReadings(description, form string) error {
 		return err
 	}
 	progress := w.progress()
+	defer progress.end()
 	e := evidence.New(c).Telling(progress.tell)
 	made, err := plan.Of(e)
 	if err != nil {

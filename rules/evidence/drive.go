@@ -106,6 +106,7 @@ func (e *Evidence) peakFor(set quantity.Voltage) (trial, error) {
 		Options: network.Options{Frequency: e.chain.Drive.Frequency.V, From: e.alike()},
 		Build:   e.trustedAt,
 	})
+	e.tellSolved()
 	return trial{peak, at}, err
 }
 

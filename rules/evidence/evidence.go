@@ -2,6 +2,7 @@ package evidence
 
 import (
 	"slices"
+	"sync"
 
 	"kilovet/hv/chain"
 	"kilovet/hv/circuit"
@@ -24,6 +25,9 @@ type Evidence struct {
 type request struct {
 	without []string
 	told    func(what string, done, of int)
+
+	telling sync.Mutex
+	solved  int // states of the circuit
 }
 
 // Without leaves families of rules out, with what they alone would compute.
@@ -43,11 +47,25 @@ func (e *Evidence) Telling(told func(what string, done, of int)) *Evidence {
 	return e
 }
 
-// Tell says how far lengthy work has come.
+// Tell says how far lengthy work has come; of is zero where its end is not known.
 func (e *Evidence) Tell(what string, done, of int) {
-	if e.request != nil && e.request.told != nil {
-		e.request.told(what, done, of)
+	if e.request == nil || e.request.told == nil {
+		return
 	}
+	e.request.telling.Lock()
+	defer e.request.telling.Unlock()
+	e.request.told(what, done, of)
+}
+
+// tellSolved tells of one more state of the circuit.
+func (e *Evidence) tellSolved() {
+	if e.request == nil || e.request.told == nil {
+		return
+	}
+	e.request.telling.Lock()
+	defer e.request.telling.Unlock()
+	e.request.solved++
+	e.request.told("states of the circuit", e.request.solved, 0)
 }
 
 // New starts the evidence for a chain in working state, with an empty memory.

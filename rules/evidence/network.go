@@ -13,6 +13,7 @@ type periodic struct{ *network.Periodic }
 // solve finds the steady state of a circuit, from that of a similar one where given.
 func (e *Evidence) solve(c *circuit.Circuit, from *network.Periodic) (periodic, error) {
 	p, err := network.Steady(trusted(c), network.Options{Frequency: e.chain.Drive.Frequency.V, From: from})
+	e.tellSolved()
 	return periodic{p}, err
 }
 

@@ -7,10 +7,21 @@ import (
 )
 
 // Reads is the magnitude of the mean voltage between two nodes: what a voltmeter shows.
+// What is left of the difference of two equal potentials is nothing.
 func (e *Evidence) Reads(at, to string) (quantity.Voltage, error) {
 	s, err := e.swing(at, to)
+	if err != nil {
+		return 0, err
+	}
+	stands, err := e.swing(at, "ground")
+	if magnitude(s.Mean) < alikeShare*stands.Peak() {
+		return 0, err
+	}
 	return magnitude(s.Mean), err
 }
+
+// alikeShare is the share of a potential below which two nodes have the same.
+const alikeShare = 1e-9
 
 // ReturnCurrent is the magnitude of the mean current in the return of the multiplier:
 // what the lowest diodes pass, since capacitors pass none.

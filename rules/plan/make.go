@@ -26,6 +26,7 @@ func Of(e *evidence.Evidence) (*Plan, error) {
 	m.cold()
 	m.before()
 	m.steps()
+	m.ratings()
 	m.survey()
 	m.trips()
 	m.after()
@@ -51,6 +52,12 @@ func takes(c *chain.Chain) []string {
 		in := &c.Instruments[i]
 		if !in.Accuracy.Set() {
 			all = append(all, "the "+in.Name.V+" is without error: its accuracy is not described")
+		}
+		if !in.ReadsCurrent() && !in.RatedVoltage.Set() {
+			all = append(all, "the "+in.Name.V+" stands what it is put to: its rated voltage is not described")
+		}
+		if Floats(in) {
+			all = append(all, fmt.Sprintf("the %s may show up to %g %% of the voltage it hangs at by itself (common practice, no source)", in.Name.V, 100*floating))
 		}
 	}
 	return all
@@ -82,6 +89,11 @@ func (m *maker) before() {
 	}
 	if m.e.Chain().Regulation != nil {
 		todo = append(todo, "Open the loop, or set it by hand: the drive is set by its peak in every step; close the loop only after the last.")
+	}
+	for i := range c.Instruments {
+		if in := &c.Instruments[i]; Floats(in) {
+			todo = append(todo, "The "+in.Name.V+" stands at high voltage itself: insulated for it, fed by a battery, read from outside, never touched before all is off and earthed.")
+		}
 	}
 	if len(dials(c)) == 0 {
 		m.plan.Open = append(m.plan.Open, "readings: neither a meter at the divider nor an [[instrument]] is described, so no step can be followed")

@@ -35,19 +35,25 @@ func Bench(c *chain.Chain) evidence.Fault {
 	}}
 }
 
-// dial is one instrument: how it reads and how far it may be wrong.
+// floating is what a voltmeter between two nodes at high voltage may show by itself, as a
+// share of that voltage: common practice, no source.
+const floating = 1e-4
+
+// dial is one instrument: how it reads and how far it may be wrong, as a share of what it
+// reads and, where it hangs at high voltage, besides.
 type dial struct {
-	name  string
-	unit  string
-	error func(*evidence.Evidence) (float64, error)
-	read  func(*evidence.Evidence) (float64, error)
+	name   string
+	unit   string
+	error  func(*evidence.Evidence) (float64, error)
+	read   func(*evidence.Evidence) (float64, error)
+	beside func(*evidence.Evidence) (float64, error) // nil where nothing
 }
 
 // dials lists the instruments of a chain, the divider's meter first.
 func dials(c *chain.Chain) []dial {
 	var all []dial
 	if c.Divider != nil && c.Divider.Meter != nil {
-		all = append(all, dial{meter, "V", dividerError, func(e *evidence.Evidence) (float64, error) {
+		all = append(all, dial{name: meter, unit: "V", error: dividerError, read: func(e *evidence.Evidence) (float64, error) {
 			v, err := e.Reads("divider.tap", "ground")
 			return float64(v), err
 		}})
@@ -66,10 +72,19 @@ func dials(c *chain.Chain) []dial {
 				return float64(i), err
 			}
 		}
+		if Floats(in) {
+			d.beside = func(e *evidence.Evidence) (float64, error) {
+				v, err := e.Between(in.At.V, "ground")
+				return floating * float64(v), err
+			}
+		}
 		all = append(all, d)
 	}
 	return all
 }
+
+// Floats reports whether an instrument stands at high voltage itself.
+func Floats(in *chain.Instrument) bool { return !in.ReadsCurrent() && in.To.Or("ground") != "ground" }
 
 func dividerError(e *evidence.Evidence) (float64, error) {
 	wrong, err := e.DividerError()
@@ -108,6 +123,11 @@ func (d dial) band(e *evidence.Evidence, at evidence.Condition) (Band, error) {
 	wrong, err := d.error(e.Under(at))
 	b.Low -= b.Value * (wrong + driveShare)
 	b.High += b.Value * (wrong + driveShare)
+	if d.beside == nil || err != nil {
+		return b, err
+	}
+	more, err := d.beside(e.Under(at))
+	b.Low, b.High = max(b.Low-more, 0), b.High+more
 	return b, err
 }
 

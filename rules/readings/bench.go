@@ -24,6 +24,7 @@ const (
 	readShare  = 0.005 // how well a steady reading is taken
 	driveShare = 0.01  // how well the drive is known
 	resolution = 1e-3  // of the largest reading of the instrument
+	least      = 1e-9  // in SI units: an instrument that shows nothing is not read better
 	effect     = 0.05  // of what a fault changes: it varies with the tolerances of the other parts
 )
 
@@ -46,7 +47,11 @@ func newBench(e *evidence.Evidence, all []taken) *bench {
 	}
 	for _, t := range all {
 		name := t.step.Readings[t.place].Instrument
-		b.own = append(b.own, readShare*t.expected.Value+resolution*largest[name])
+		own := readShare*t.expected.Value + resolution*largest[name]
+		if t.expected.Value <= 0 { // its bounds say what it may show by itself
+			own = max(own, t.expected.High/2, least)
+		}
+		b.own = append(b.own, own)
 	}
 	b.common = b.shared()
 	return b

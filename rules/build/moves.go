@@ -22,13 +22,11 @@ func movedDimensions(f *chain.Field) (all []Dimension) {
 		}
 		for _, e := range b.edges {
 			for _, way := range []complex128{1i, 1} {
-				if e.along(way, d.near) {
-					continue
-				}
-				p, ok := d.pullOf(e, way)
-				if ok && !known[p.signature()] {
-					known[p.signature()] = true
-					all = append(all, p.dimension(b, e, known)...)
+				for _, p := range d.pullsOf(e, way) {
+					if !known[p.signature()] {
+						known[p.signature()] = true
+						all = append(all, p.dimension(b, known)...)
+					}
 				}
 			}
 		}
@@ -42,8 +40,8 @@ func movedDimensions(f *chain.Field) (all []Dimension) {
 
 // dimension is what a pull of an edge of a body changes; none where there is no length
 // that says it.
-func (p *pull) dimension(b body, seed stretch, known map[string]bool) []Dimension {
-	name, now, sense := p.length(b, seed)
+func (p *pull) dimension(b body, known map[string]bool) []Dimension {
+	name, now, sense := p.length(b)
 	between := strings.Split(strings.TrimPrefix(name, "distance of "), " from ")
 	slices.Sort(between)
 	pair := fmt.Sprint(between, now)
@@ -51,7 +49,7 @@ func (p *pull) dimension(b body, seed stretch, known map[string]bool) []Dimensio
 		return nil
 	}
 	known[pair] = true
-	middle := (seed.from + seed.to) / 2
+	middle := (p.seed.from + p.seed.to) / 2
 	return []Dimension{{
 		Name: name, Key: "field", Value: quantity.Length(now), Near: &middle,
 		With: func(v quantity.Length) *Arrangement { return p.by((v - quantity.Length(now)) * quantity.Length(sense)) },
@@ -61,22 +59,22 @@ func (p *pull) dimension(b body, seed stretch, known map[string]bool) []Dimensio
 // length is a length that a pull changes, by name, and whether it grows or shrinks with
 // the move: the radius of a wall; how far an electrode is from the next one along the
 // axis; the height of what is stretched.
-func (p *pull) length(b body, seed stretch) (name string, now, sense float64) {
+func (p *pull) length(b body) (name string, now, sense float64) {
 	if p.way == 1 {
-		return "radius of " + b.name, real(seed.from), 1
+		return p.radius(b), real(p.seed.from), 1
 	}
 	if name, now, sense = p.distance(b); now > 0 {
 		return name, now, sense
 	}
 	for _, e := range p.stretched(b) {
-		if l := cmplx.Abs(e.to - e.from); now == 0 || l < now {
+		if l := math.Abs(imag(e.to - e.from)); now == 0 || l < now {
 			now, sense = l, 1
 			if top := imag(e.to) > imag(e.from); top != p.moved[e.end] {
 				sense = -1
 			}
 		}
 	}
-	middle := (seed.from + seed.to) / 2
+	middle := (p.seed.from + p.seed.to) / 2
 	where := "r " + quantity.Text(quantity.Length(real(middle))) + ", z " + quantity.Text(quantity.Length(imag(middle)))
 	return "height of " + b.name + ", moved at " + where, now, sense
 }

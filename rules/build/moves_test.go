@@ -49,6 +49,27 @@ var sleeved = "[[field]]\nname = \"lead\"\nmedium = \"vacuum\"\n" +
 	outline("boundary", "", "", `{ from = ["3 mm", "0 mm"] }, { to = ["10 mm", "0 mm"] }`) +
 	outline("boundary", "", "", `{ from = ["3 mm", "80 mm"] }, { to = ["60 mm", "80 mm"] }`)
 
+// frustum is a spacer with a sloped side between two plates.
+var frustum = "[[field]]\nname = \"spacer\"\nmedium = \"vacuum\"\n" +
+	outline("electrodes", "cathode", "-10 kV", `{ from = ["0 mm", "0 mm"] }, { to = ["40 mm", "0 mm"] }`) +
+	outline("electrodes", "anode", "0 V", `{ from = ["0 mm", "10 mm"] }, { to = ["40 mm", "10 mm"] }`) +
+	outline("dielectrics", "spacer", "", `{ from = ["0 mm", "0 mm"] }, { to = ["15 mm", "0 mm"] }, { to = ["20 mm", "10 mm"] }, { to = ["0 mm", "10 mm"] }, { to = ["0 mm", "0 mm"] }`) +
+	outline("boundary", "", "", `{ from = ["40 mm", "0 mm"] }, { to = ["40 mm", "10 mm"] }`)
+
+// chamfered is a pin in a hole whose edge is a chamfer, half of it.
+var chamfered = "[[field]]\nname = \"lead\"\nmedium = \"vacuum\"\n" +
+	outline("electrodes", "pin", "10 kV", `{ from = ["3 mm", "0 mm"] }, { to = ["3 mm", "80 mm"] }`) +
+	outline("electrodes", "plate", "0 V", `{ from = ["10 mm", "0 mm"] }, { to = ["10 mm", "4 mm"] }, { to = ["12 mm", "6 mm"] }, { to = ["60 mm", "6 mm"] }, { to = ["60 mm", "80 mm"] }`) +
+	outline("boundary", "", "", `{ from = ["3 mm", "0 mm"] }, { to = ["10 mm", "0 mm"] }`) +
+	outline("boundary", "", "", `{ from = ["3 mm", "80 mm"] }, { to = ["60 mm", "80 mm"] }`)
+
+// cone is one of 30 degrees to the axis with a ball of 2 mm as its tip over the floor of a
+// can.
+var cone = "[[field]]\nname = \"tip\"\nmedium = \"air\"\n" +
+	outline("electrodes", "cone", "10 kV", `{ from = ["0 mm", "10 mm"] }, { to = ["1.7320508 mm", "11 mm"], centre = ["0 mm", "12 mm"], turn = "left" }, { to = ["30.0222138 mm", "60 mm"] }`) +
+	outline("electrodes", "can", "0 V", `{ from = ["0 mm", "0 mm"] }, { to = ["90 mm", "0 mm"] }, { to = ["90 mm", "60 mm"] }`) +
+	outline("boundary", "", "", `{ from = ["30.0222138 mm", "60 mm"] }, { to = ["90 mm", "60 mm"] }`)
+
 // places are all points of an arrangement in millimetres, in the order of the drawing.
 func places(f *chain.Field) (list []string) {
 	add := func(strokes []chain.Stroke) {
@@ -86,11 +107,19 @@ func TestMovesOfADrawing(t *testing.T) {
 		{sleeved, "radius of plate", 10, 12, map[string]string{"10,0": "12,0", "13,3": "15,3", "13,0": "15,0"}},
 		{sleeved, "height of sleeve, moved at r 5 mm, z 20 mm", 20, 25, map[string]string{"7,20": "7,25", "3,20": "3,25"}},
 		{sleeved, "radius of pin", 3, 2, map[string]string{"3,0": "2,0", "3,20": "2,20", "3,80": "2,80"}},
+		{frustum, "distance of cathode from anode", 10, 12, map[string]string{"0,0": "0,-2", "40,0": "40,-2", "15,0": "15,-2"}},
+		{frustum, "radius of spacer at z 0 m", 15, 12, map[string]string{"15,0": "12,0"}},
+		{frustum, "radius of spacer at z 10 mm", 20, 18, map[string]string{"20,10": "18,10"}},
+		{frustum, "radius of spacer", 15, 16, map[string]string{"15,0": "16,0", "20,10": "21,10"}},
+		{chamfered, "radius of plate", 10, 11, map[string]string{"10,0": "11,0", "10,4": "11,4", "12,6": "13,6"}},
+		{chamfered, "radius of plate at z 6 mm", 12, 11, map[string]string{"12,6": "11,6"}},
+		{cone, "distance of cone from can", 10, 13, map[string]string{"0,10": "0,13", "1.732,11": "1.732,14", "0,12": "0,15", "30.02,60": "30.02,63", "90,60": "90,63"}},
+		{cone, "tip radius of cone, its end kept", 2, 3, map[string]string{"1.732,11": "2.598,11.5", "0,12": "0,13", "30.02,60": "30.6,60"}},
 	} {
 		f := drawn(t, c.text)
 		all := build.Described(f).Dimensions
 		i := slices.IndexFunc(all, func(d build.Dimension) bool {
-			return d.Name == c.name && math.Abs(float64(d.Value)*1e3-c.now) < 1e-9
+			return d.Name == c.name && math.Abs(float64(d.Value)*1e3-c.now) < 1e-6
 		})
 		if i < 0 {
 			t.Errorf("no %s of %g mm", c.name, c.now)
@@ -118,7 +147,7 @@ func TestMovesOfADrawing(t *testing.T) {
 
 // The present value of every dimension is the drawing as it is, and no half of one is.
 func TestDimensionsAreThoseOfTheDrawing(t *testing.T) {
-	for _, text := range []string{rodGap, sleeved} {
+	for _, text := range []string{rodGap, sleeved, frustum, chamfered, cone} {
 		f := drawn(t, text)
 		was := strings.Join(places(f), " ")
 		for _, d := range build.Described(f).Dimensions {

@@ -10,17 +10,20 @@ import (
 
 // pull moves a part of a drawing along r or z: the points that move, with whatever is
 // drawn onto them. Lines in the direction of the move that have one end in it grow or
-// shrink; nothing else changes its form.
+// shrink, and where it tilts sloped lines take another slope; nothing else changes its
+// form.
 type pull struct {
 	*drawing
 	way   complex128 // 1 along r, i along z
 	moved []bool     // by the number of the point
+	seed  stretch    // what it began with
+	tilts bool
 }
 
 // pullOf is the least part of a drawing that can move with an edge; ok is false where
 // that is all of it, or where it would leave the axis.
-func (d *drawing) pullOf(seed stretch, way complex128) (p *pull, ok bool) {
-	p = &pull{d, way, make([]bool, len(d.points))}
+func (d *drawing) pullOf(seed stretch, way complex128, tilts bool) (p *pull, ok bool) {
+	p = &pull{d, way, make([]bool, len(d.points)), seed, tilts}
 	p.take(seed.start, seed.end)
 	for grown := true; grown; {
 		grown = false
@@ -50,7 +53,7 @@ func (p *pull) take(points ...int) (grown bool) {
 // stretched, what lies on one that moves whole, and one that something moves off. It
 // reports whether that was new.
 func (p *pull) follow(e stretch) (grown bool) {
-	slides := e.along(p.way, p.near)
+	slides := e.along(p.way, p.near) || p.tilts && p.sloped(e)
 	for _, i := range e.on {
 		if p.moved[i] && !slides {
 			grown = p.take(e.start, e.end) || grown

@@ -30,7 +30,7 @@ const (
 	resizedMost  = 4.0
 	littleStep   = 1.02
 	leastPower   = 0.03
-	mostMoves    = 5    // dimensions of a described arrangement that are tried
+	mostMoves    = 6    // dimensions of a described arrangement that are tried
 	justMet      = 0.97 // of what is allowed, from which a dimension serves
 	nothingAsked = "the rule is met"
 )

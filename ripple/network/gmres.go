@@ -7,6 +7,7 @@ import "math"
 type krylov struct {
 	n       int
 	most    int
+	used    int // vectors of the last solution
 	basis   [][]float64
 	h       [][]float64 // by column
 	cos     []float64
@@ -25,7 +26,7 @@ func newKrylov(n int) *krylov {
 // the part that was reached.
 func (s *krylov) solve(b []float64, apply, precondition func(x []float64), tolerance float64) float64 {
 	size := norm(b)
-	if size == 0 {
+	if s.used = 0; size == 0 {
 		return 0
 	}
 	copy(s.basis[0], b)
@@ -42,6 +43,7 @@ func (s *krylov) solve(b []float64, apply, precondition func(x []float64), toler
 			break
 		}
 	}
+	s.used = k
 	s.combine(k, b)
 	precondition(b)
 	return math.Abs(s.g[k]) / size

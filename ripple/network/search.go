@@ -11,6 +11,7 @@ import (
 // and the state is led on in leaps of many periods, as time itself would.
 type search struct {
 	*envelope
+	recall    recall
 	level     *level  // the voltage to be held; nil where the drive is given
 	sound     spot    // the last state that was not a step back
 	most      int     // steps that all attempts together may take
@@ -167,7 +168,8 @@ func (s *search) newton() {
 	copy(left, s.r)
 	size := norm(s.r)
 	for range 4 {
-		rest := s.solver.solve(left, func(x []float64) { s.minus(s.linear, x) }, s.precondition, 1e-3)
+		rest := s.solver.solve(left, func(x []float64) { s.minus(s.linear, x) }, s.answer, 1e-3)
+		s.recall.learn(s.solver)
 		axpy(1, left, s.step)
 		if size == 0 {
 			return
@@ -182,6 +184,12 @@ func (s *search) newton() {
 			left[i] = r - left[i]
 		}
 	}
+}
+
+// answer is the precondition made better by what was learnt.
+func (s *search) answer(x []float64) {
+	s.recall.improve(x)
+	s.precondition(x)
 }
 
 // balanced reports whether the charges come back to 1e-8 of what the diodes pass,

@@ -103,6 +103,7 @@ func (s *search) search(from *Periodic) (*Periodic, error) {
 
 // prepare guesses a state at the given drive.
 func (s *search) prepare(press float64) {
+	s.recall.forget()
 	s.driveTo(1)
 	s.guess(press)
 	if s.level != nil {

@@ -21,21 +21,28 @@ type track struct {
 	u       []float64 // 4 n a step
 	amps    []float64 // 4 a step and inductor
 	on      []bool    // by step and diode
-	factors []trio
+	factors [][]trio  // by blocks of steps
 }
 
 func (t *track) clear() {
 	t.steps, t.u, t.amps, t.on = t.steps[:0], t.u[:0], t.amps[:0], t.on[:0]
 }
 
+// block is the number of steps whose factors lie together: memory that grows by blocks is
+// never copied.
+const block = 64
+
 // slot is where the factors of the next step go.
 func (t *track) slot() []trio {
-	size := t.pattern.size()
-	k := len(t.steps) * size
-	for len(t.factors) < k+size {
-		t.factors = append(t.factors, make([]trio, 64*size)...)
+	if k := len(t.steps); k == block*len(t.factors) {
+		t.factors = append(t.factors, make([]trio, block*t.pattern.size()))
 	}
-	return t.factors[k : k+size]
+	return t.factorsOf(len(t.steps))
+}
+
+func (t *track) factorsOf(step int) []trio {
+	size, k := t.pattern.size(), step%block
+	return t.factors[step/block][k*size : (k+1)*size]
 }
 
 // keep records the trial step of a walker, before it is accepted.
@@ -71,7 +78,6 @@ func (t *track) conducting(step int) []bool {
 // track to its end. The diode law is continuous, so the instants of switching do
 // not enter.
 func (t *track) carry(dq, di []float64, lanes []trio, du []float64) {
-	size := t.pattern.size()
 	for k := range t.steps {
 		h := t.steps[k].length
 		pole, part := poleR, &residue[2]
@@ -85,7 +91,7 @@ func (t *track) carry(dq, di []float64, lanes []trio, du []float64) {
 			x := t.changeOfCoil(i, h, pole, di[i], trio{})
 			t.inductors[i].injectTrio(lanes, trio{-h * x.r, -h * x.a, -h * x.b})
 		}
-		t.pattern.solve(t.factors[k*size:(k+1)*size], lanes)
+		t.pattern.solve(t.factorsOf(k), lanes)
 		for i := range t.inductors {
 			x := t.changeOfCoil(i, h, pole, di[i], t.inductors[i].differenceTrio(lanes))
 			di[i] = part.of(&x)

@@ -14,7 +14,7 @@ func pathsTable(e *evidence.Evidence) []exhibit.Table {
 	}
 	t := exhibit.Table{
 		ID: "beam.paths", Chapter: exhibit.Beam, Title: "Paths to the beam", Basis: "ripple.phasor",
-		Columns: []exhibit.Column{{Head: "path"}, {Head: "what"}, {Head: "frequency", Unit: "Hz"}, {Head: "cathode to anode", Unit: "V"},
+		Columns: []exhibit.Column{{Head: "path"}, {Head: "what"}, {Head: "at", Unit: "Hz"}, {Head: "cathode to anode", Unit: "V"},
 			{Head: "across the bias", Unit: "V"}, {Head: "of the emission", Unit: "1"}, {Head: "what it does"}},
 		Note: "Peak to peak, of noise rms; drift is that of an exposure. The ways of one harmonic may add or take away from each other. Hum keeps step with the mains.",
 	}

@@ -22,7 +22,7 @@ func answerTables(e *evidence.Evidence) (all []exhibit.Table) {
 			Note:    "At " + quantity.Text(weak.Strength) + ", r " + quantity.Text(weak.At.R) + ", z " + quantity.Text(weak.At.Z) + "; all other dimensions and the voltages kept. Solved again for each.",
 		}
 		for _, a := range answers {
-			t.Rows = append(t.Rows, []exhibit.Cell{exhibit.Words(a.Name), exhibit.Number(a.Value), exhibit.Number(quantity.Fraction(a.Power)), exhibit.OrWords(a.Needed, a.Err)})
+			t.Rows = append(t.Rows, []exhibit.Cell{exhibit.Words(a.Name), exhibit.Number(a.Value), exhibit.Exponent(a.Power), exhibit.OrWords(a.Needed, a.Err)})
 		}
 		all = append(all, t)
 	}

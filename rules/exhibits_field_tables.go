@@ -115,7 +115,7 @@ func edgeTable(e *evidence.Evidence, f *build.Arrangement, s *field.Solution) ex
 		t.Columns = append(t.Columns, exhibit.Column{Head: "at " + quantity.Text(d), Unit: "V/m"})
 	}
 	for _, x := range s.Edges() {
-		row := []exhibit.Cell{exhibit.Words(evidence.EdgeName(x)), exhibit.Words(joined(x)), exhibit.Number(quantity.Fraction(x.Exponent))}
+		row := []exhibit.Cell{exhibit.Words(evidence.EdgeName(x)), exhibit.Words(joined(x)), exhibit.Exponent(x.Exponent)}
 		judged, err := e.JudgedAt(f, x)
 		row = append(row, exhibit.OrWords(judged, err))
 		for _, d := range evidence.EdgeDistances() {

@@ -70,4 +70,7 @@ func TestCell(t *testing.T) {
 	if got := digest.Cell("m", nil, "no gap"); got != "no gap" {
 		t.Errorf("got %s", got)
 	}
+	if got := digest.Cell("1", &v, "0.0125"); got != "0.0125" {
+		t.Errorf("got %s", got)
+	}
 }

@@ -34,9 +34,9 @@ func Known(s rule.Source) string {
 	return string(s.Mark)
 }
 
-// Cell writes a cell of a column: a number in its unit, or its words.
+// Cell writes a cell of a column: its words, or a number in its unit.
 func Cell(unit string, value *float64, text string) string {
-	if value == nil {
+	if value == nil || text != "" {
 		return text
 	}
 	return Amount(rule.Amount{Value: *value, Unit: unit})

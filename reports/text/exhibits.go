@@ -83,24 +83,53 @@ func newGrid(w *writer, t exhibit.Table) *grid {
 const leastColumn = 8
 
 // fitted is the width of each column: what its longest text takes, the widest made
-// narrower until all fit; nil where they cannot.
+// narrower until all fit, as long as it can be without words broken inside; nil where they
+// cannot.
 func (g *grid) fitted() []int {
-	widths := make([]int, len(g.heads))
+	widths, whole := make([]int, len(g.heads)), make([]int, len(g.heads))
 	sum := 2 + between*(len(widths)-1)
 	for i := range widths {
 		for _, row := range append(g.cells, g.heads) {
 			widths[i] = max(widths[i], runes(row[i]))
+			whole[i] = max(whole[i], g.unbroken(i, row[i]))
 		}
 		sum += widths[i]
 	}
 	for ; sum > g.width; sum-- {
-		widest := slices.Index(widths, slices.Max(widths))
-		if widths[widest] <= leastColumn {
+		widest := widestAbove(widths, whole)
+		if widest < 0 {
+			widest = widestAbove(widths, nil)
+		}
+		if widest < 0 {
 			return nil
 		}
 		widths[widest]--
 	}
 	return widths
+}
+
+// unbroken is how wide a cell must be for nothing in it to be broken inside: numbers stay
+// with their units.
+func (g *grid) unbroken(column int, text string) int {
+	if g.number[column] && !slices.Contains(g.heads, text) {
+		return runes(text)
+	}
+	return longestPiece(text)
+}
+
+// widestAbove is the widest column that may still be narrower, -1 for none.
+func widestAbove(widths, least []int) int {
+	widest := -1
+	for i, w := range widths {
+		floor := leastColumn
+		if least != nil {
+			floor = max(floor, least[i])
+		}
+		if w > floor && (widest < 0 || w > widths[widest]) {
+			widest = i
+		}
+	}
+	return widest
 }
 
 func (g *grid) write() {

@@ -45,3 +45,25 @@ func TestAWideColumnIsWrapped(t *testing.T) {
 		t.Errorf("%q is missing in\n%s", want, got)
 	}
 }
+
+// A narrow column breaks at spaces and after strokes, points and hyphens; the wide ones
+// give way first.
+func TestColumnsAreNotBrokenInsideWords(t *testing.T) {
+	r := sample.Sound()
+	v := 1.25
+	r.Tables = []exhibit.Table{{
+		ID: "t", Chapter: exhibit.Beam, Title: "Ways", Basis: "none",
+		Columns: []exhibit.Column{{Head: "path"}, {Head: "what"}, {Head: "voltage", Unit: "V"}, {Head: "what it does"}},
+		Rows: [][]exhibit.Cell{{exhibit.Words("mains/feed/transformer"), exhibit.Words("common mode through the screened heater feed and its capacitance to everything else"),
+			{Value: &v}, exhibit.Words("blurs; bands in a dwell where the regulation of temperature is slow")}},
+	}}
+	got := string(text.Render(r, text.Options{All: true, Width: 60}))
+	for _, want := range []string{"transformer", "capacitance", "everything", "regulation", "temperature", "1.25 V"} {
+		if !strings.Contains(got, want) {
+			t.Errorf("%q is broken in\n%s", want, got)
+		}
+	}
+	if !strings.Contains(got, "mains/") || strings.Contains(got, "mains/feed/t") {
+		t.Errorf("the path is not broken at its strokes in\n%s", got)
+	}
+}

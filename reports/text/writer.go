@@ -99,7 +99,7 @@ func (w *writer) fit(s string, width int) string {
 }
 
 // broken breaks a text at its spaces, and inside a word only where the word is
-// longer than a line.
+// longer than a line: after a stroke, a point or a hyphen if it has one.
 func broken(s string, width int) []string {
 	var lines []string
 	line := ""
@@ -112,8 +112,12 @@ func broken(s string, width int) []string {
 			lines = append(lines, line)
 		}
 		for runes(word) > width {
-			lines = append(lines, string([]rune(word)[:width]))
-			word = string([]rune(word)[width:])
+			begin := string([]rune(word)[:width])
+			if i := strings.LastIndexAny(begin, separators); i >= 0 {
+				begin = begin[:i+1]
+			}
+			lines = append(lines, begin)
+			word = strings.TrimPrefix(word, begin)
 		}
 		line = word
 	}
@@ -121,6 +125,24 @@ func broken(s string, width int) []string {
 		return lines
 	}
 	return append(lines, line)
+}
+
+// separators are where a long word may be broken.
+const separators = "/.-"
+
+// longestPiece is the width below which a text is broken inside what holds together.
+func longestPiece(s string) (most int) {
+	for _, word := range strings.Fields(s) {
+		for word != "" {
+			end := len(word)
+			if i := strings.IndexAny(word, separators); i >= 0 {
+				end = i + 1
+			}
+			most = max(most, runes(word[:end]))
+			word = word[end:]
+		}
+	}
+	return most
 }
 
 func pad(s string, width int) string { return s + strings.Repeat(" ", max(0, width-runes(s))) }

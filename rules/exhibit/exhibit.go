@@ -3,6 +3,8 @@
 // whoever renders them only lays them out.
 package exhibit
 
+import "kilovet/hv/quantity"
+
 // Chapter is the part of a review an exhibit belongs to.
 type Chapter string
 
@@ -109,7 +111,8 @@ type Column struct {
 	Unit string // SI without prefix of the numbers below; empty where they are words
 }
 
-// Cell is a number in the unit of its column, or words.
+// Cell is a number in the unit of its column, or words; a number that has a text is shown
+// by it.
 type Cell struct {
 	Text  string
 	Value *float64 // nil where the cell holds words or nothing
@@ -123,6 +126,9 @@ func Number[Q ~float64](v Q) Cell {
 	f := float64(v)
 	return Cell{Value: &f}
 }
+
+// Exponent is a pure number that is no share of anything: it is shown as it is.
+func Exponent(v float64) Cell { return Cell{Text: quantity.Significant(v), Value: &v} }
 
 // OrWords is the number, or the reason in words where there is none.
 func OrWords[Q ~float64](v Q, err error) Cell {

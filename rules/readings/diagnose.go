@@ -56,9 +56,12 @@ func diagnose(e *evidence.Evidence, all []taken, c *Comparison) {
 	trials := b.tryAll(hypotheses(e))
 	c.Tried = len(trials)
 	trials = append(trials, b.between(trials)...)
-	var seen []*trial
+	var seen, faint []*trial
 	for i := range trials {
 		t := &trials[i]
+		if t.err == nil && t.misfit < healthy.misfit && t.misfit >= healthy.misfit-alike {
+			faint = append(faint, t)
+		}
 		switch {
 		case t.err != nil:
 			c.Open = append(c.Open, t.name+": "+t.err.Error())
@@ -78,6 +81,7 @@ func diagnose(e *evidence.Evidence, all []taken, c *Comparison) {
 		return 0
 	})
 	c.Suspects = b.grouped(seen)
+	b.join(c.Suspects, faint)
 	c.Apart = b.apart(c.Suspects)
 }
 
@@ -97,6 +101,19 @@ next:
 		}
 	}
 	return all
+}
+
+// join adds to each suspect what by itself explains the readings hardly better than a
+// healthy chain, and yet cannot be told from it.
+func (b *bench) join(suspects []Suspect, faint []*trial) {
+	for _, t := range faint {
+		for i := range suspects {
+			if b.misfit(t.predicted, suspects[i].trial.predicted) < alike {
+				suspects[i].Names = append(suspects[i].Names, t.name)
+				break
+			}
+		}
+	}
 }
 
 // Fits reports whether a suspect explains the readings.

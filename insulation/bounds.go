@@ -24,7 +24,7 @@ type SurfaceBounds struct {
 // bounds them from above, which is an assumption. Thin and weak gases and vacuum have no
 // bound above.
 func CreepageBounds(g gap.Gap, v gap.Voltages) SurfaceBounds {
-	b := SurfaceBounds{Least: gap.ResultOf(aloneNeeded(g, v))}
+	b := SurfaceBounds{Least: gap.ResultOf(atLeast(g, v, aloneNeeded))}
 	b.Enough = gap.ResultOf(cleanSurface(g, v, b.Least))
 	return b
 }

@@ -16,7 +16,8 @@ type StrengthBounds struct {
 }
 
 // BreakdownBounds bounds the breakdown of a gap. The lower bound is one of air and gases,
-// whose laws also hold left of the Paschen minimum, and of surfaces in vacuum. The upper one
+// whose laws also hold left of the Paschen minimum, of boards, oil and solids, and of surfaces
+// in vacuum. The upper one
 // in other gases than air is that of plates, or that helium, argon, hydrogen and carbon
 // dioxide stand no more than air.
 func BreakdownBounds(g gap.Gap, sharp gap.Polarity) StrengthBounds {
@@ -69,7 +70,7 @@ func narrower(g gap.Gap, of law) (gap.Answer[quantity.Voltage], error) {
 		a, err := of(g)
 		a.Because += "; as along 300 mm, where the law ends: a longer surface stands no less"
 		return a, err
-	case g.Medium != gap.Air && g.Medium != gap.InGas:
+	case g.Medium == gap.Vacuum:
 		return gap.Answer[quantity.Voltage]{}, lack.Range("no gap bounds that in %s from below", named(g))
 	}
 	return nearest(g, 1/stepOfGaps, "stands no less", of)

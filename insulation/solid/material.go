@@ -1,6 +1,7 @@
 package solid
 
 import (
+	"fmt"
 	"slices"
 	"strings"
 
@@ -51,7 +52,8 @@ func Find(name string) (Material, error) {
 			return m, nil
 		}
 	}
-	return Material{}, lack.Range("no strength of %s is known here: give spacing.strength and spacing.tested_thickness of its maker, or one that is known: %s", name, strings.Join(known(), ", "))
+	why := fmt.Sprintf("no strength of %s is known here: give spacing.strength and spacing.tested_thickness of its maker, or one that is known: %s", name, strings.Join(known(), ", "))
+	return Material{}, lack.Because(why, "spacing.strength", "spacing.tested_thickness")
 }
 
 // known are the names of the materials whose strength is known.

@@ -55,7 +55,7 @@ func reach(g gap.Gap, m Material) (thin, thick quantity.Length) {
 func Strength(m Material, t quantity.Length) (gap.Answer[quantity.Field], error) {
 	none := gap.Answer[quantity.Field]{}
 	if m.Strength.Least == 0 {
-		return none, lack.Range("no strength of %s was read", m.Name)
+		return none, lack.Because("no strength of "+m.Name+" was read", "spacing.strength", "spacing.tested_thickness")
 	}
 	if thin, thick := m.reach(); !quantity.AtLeast(t, thin) || !quantity.AtMost(t, thick) {
 		return none, lack.Range("the strength of %s is known from %s to %s, asked for %s", m.Name, quantity.Text(thin), quantity.Text(thick), quantity.Text(t))

@@ -145,16 +145,16 @@ func TestBlanksAreLacks(t *testing.T) {
 	_, err := solid.Find("")
 	lacks(t, "no name", err, lack.Missing)
 	_, err = solid.Find("unobtainium")
-	lacks(t, "unknown", err, lack.Outside)
+	lacks(t, "unknown", err, lack.Missing)
 	for _, name := range []string{"PVC", "polyurethane"} {
 		m, err := solid.Find(name)
 		if err != nil {
 			t.Fatal(err)
 		}
 		_, err = solid.Strength(m, 1*mm)
-		lacks(t, name+" has no strength", err, lack.Outside)
+		lacks(t, name+" has no strength", err, lack.Missing)
 		_, err = solid.ClearanceNeeded(sheet(name, 0), gap.Voltages{Peak: 10 * kV})
-		lacks(t, name+" has no thickness", err, lack.Outside)
+		lacks(t, name+" has no thickness", err, lack.Missing)
 	}
 	m, _ := solid.Find("alumina")
 	for _, size := range []quantity.Length{9e-6, 101 * mm, 0, -1} {

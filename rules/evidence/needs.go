@@ -63,6 +63,17 @@ func (x Spacing) SurfaceFor(v quantity.Voltage) (quantity.Length, error) {
 	return insulation.CreepageForFlashover(x.Gap, v)
 }
 
+// ClearanceAtLeast and CreepageAtLeast are what the tables of air ask for at the highest
+// voltages that they answer.
+func (x Spacing) ClearanceAtLeast() (gap.Answer[quantity.Length], error) {
+	return insulation.ClearanceAtLeast(x.Gap, x.Voltages)
+}
+
+// CreepageAtLeast is ClearanceAtLeast along the surface.
+func (x Spacing) CreepageAtLeast() (gap.Answer[quantity.Length], error) {
+	return insulation.CreepageAtLeast(x.Gap, x.Voltages)
+}
+
 // SurfaceBounds are what is known of the length of surface where no figure of it is.
 func (x Spacing) SurfaceBounds() insulation.SurfaceBounds {
 	return insulation.CreepageBounds(x.Gap, x.Voltages)

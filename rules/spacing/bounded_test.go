@@ -115,3 +115,17 @@ func TestPastHalfAMetreOnlyTheLowerBoundIsKnown(t *testing.T) {
 		}
 	}
 }
+
+// A solid thicker than its law knows stands at least what the thickest known does: PTFE to
+// 100 mm; and so does a board wider than the needle table, which ends at 547 mm.
+func TestPastTheEndOfALawTheLowerBoundHolds(t *testing.T) {
+	for medium, material := range map[string]string{"solid": "PTFE", "printed board": "FR-4"} {
+		clearance := map[string]string{"solid": "150 mm", "printed board": "600 mm"}[medium]
+		for voltage, want := range map[string]rule.Verdict{"100 V": rule.Marginal, "900 kV": rule.Unassessed} {
+			f := findings(t, site(0)+fmt.Sprintf("[[spacing]]\nname = \"g\"\nvoltage = %q\nmedium = %q\nclearance = %q\ncreepage = \"9 m\"\nmaterial = %q\n", voltage, medium, clearance, material))["spacing.breakdown | g"]
+			if f.Verdict != want && f.Verdict != rule.Meets || want == rule.Unassessed && f.Verdict != want || !strings.Contains(f.Because, "where the law ends: this gap stands no less") {
+				t.Errorf("%s, %s: %s: %s", medium, voltage, f.Verdict, f.Because)
+			}
+		}
+	}
+}

@@ -67,6 +67,8 @@ func inAir(s *chain.Spacing) bool {
 	return s.Medium.V == "air" || s.Medium.V == "printed board" || s.Medium.V == "gas" && s.Gas.Or("air") == "air"
 }
 
+func gaseous(s *chain.Spacing) bool { return s.Medium.V == "air" || s.Medium.V == "gas" }
+
 // classTaken is what is taken for granted where a spacing does not say what it has to do.
 func classTaken(s *chain.Spacing) []string {
 	if s.Insulation.Set() || s.Medium.V == "vacuum" {
@@ -129,6 +131,8 @@ func unneeded(f rule.Finding, s *chain.Spacing, x evidence.Spacing, given docume
 		return bounded(f, s, x, why)
 	case f.Rule == "spacing.clearance" && tooSharp(s, x):
 		return neverEnough(f, x, why)
+	case inAir(s) && given.Set() && why.Kind == lack.Outside:
+		return pastTables(f, s, x, given, why)
 	}
 	f = f.Lacking(why)
 	if given.Set() && why.Kind != lack.Missing {

@@ -114,7 +114,7 @@ var corona = rule.Rule{
 
 func judgeCorona(e *evidence.Evidence, s *chain.Spacing) (rule.Finding, string) {
 	f := finding("spacing.corona", rule.Performance, rule.AtMost, s)
-	if s.Medium.V != "air" && s.Medium.V != "gas" {
+	if !gaseous(s) {
 		return f, "corona is judged in air and gas"
 	}
 	if s.Of != nil && strings.HasSuffix(s.Name.V, ": "+chain.BareStrip) {

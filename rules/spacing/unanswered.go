@@ -50,7 +50,7 @@ func unanswered(f rule.Finding, s *chain.Spacing, x evidence.Spacing) rule.Findi
 	}
 	f.Because = within(v, b)
 	f = f.Lacking(why)
-	if len(f.Missing) == 0 && s.Clearance.Set() {
+	if len(f.Missing) == 0 && s.Clearance.Set() && gaseous(s) {
 		f.Remedy = measured(s, "at which voltage this gap breaks down", "keep the peak under 80 % of it")
 	}
 	return f

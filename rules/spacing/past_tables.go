@@ -1,0 +1,44 @@
+package spacing
+
+import (
+	"fmt"
+
+	"kilovet/hv/chain"
+	"kilovet/hv/document"
+	"kilovet/hv/lack"
+	"kilovet/hv/quantity"
+	"kilovet/rules/evidence"
+	"kilovet/rules/rule"
+)
+
+// pastTables judges a distance in air past the last row of the tables: less than that row
+// asks for is too little, more is unassessed.
+func pastTables(f rule.Finding, s *chain.Spacing, x evidence.Spacing, given document.Given[quantity.Length], why *lack.Lack) rule.Finding {
+	least, err := x.ClearanceAtLeast()
+	counted, taken := given.V, ""
+	if f.Rule == "spacing.creepage" {
+		if least, err = x.CreepageAtLeast(); err == nil {
+			counted, taken, err = x.Surface()
+		}
+	}
+	if err != nil {
+		return f.Lacking(why)
+	}
+	f.Because = fmt.Sprintf("%s; less than %s is too little (%s)", why.Error(), quantity.Text(least.Value), least.Because)
+	if taken != "" {
+		f.Because += "; " + taken
+	}
+	f.Sources = rule.Cited(least.Sources)
+	if !quantity.AtLeast(counted, least.Value) {
+		f.Under = x.Under.Text()
+		f = f.Least(rule.Of(counted), rule.Of(least.Value), 0)
+		f.Remedy = alternatives("lower the voltage", wider(s, given, least.Value+given.V-counted)) + "; that much is needed at least"
+		return f
+	}
+	because := f.Because
+	f.Because = ""
+	f = f.Lacking(why)
+	f.Because = because
+	f.Remedy = alternatives("lower the voltage", "prove it by a voltage test that a local code or a standard of the product names")
+	return f
+}

@@ -103,16 +103,11 @@ func distance(e *evidence.Evidence, s *chain.Spacing, id string, given document.
 	if !given.Set() {
 		return f.Lacking(lack.Key(given.Key))
 	}
-	counted := given.V
-	if id == "spacing.creepage" {
-		taken := ""
-		if counted, taken, err = x.Surface(); err != nil {
-			return f.Lacking(err)
-		}
-		if taken != "" {
-			f.Because += "; " + taken
-		}
+	counted, taken, err := countedOf(id, x, given.V)
+	if err != nil {
+		return f.Lacking(err)
 	}
+	f.Because += taken
 	f = f.Least(rule.Of(counted), rule.Of(need.Value), limits.DistanceMargin).Assume(need.Assumptions...).Assume(classTaken(s)...)
 	switch {
 	case f.Verdict == rule.Meets:
@@ -122,6 +117,17 @@ func distance(e *evidence.Evidence, s *chain.Spacing, id string, given document.
 		f.Remedy = alternatives(wider(s, given, need.Value+given.V-counted), lowered(id, x), "lower the voltage")
 	}
 	return f
+}
+
+// countedOf is the part of a given distance that counts, and what is said of the rest.
+func countedOf(id string, x evidence.Spacing, given quantity.Length) (counted quantity.Length, taken string, err error) {
+	if id != "spacing.creepage" {
+		return given, "", nil
+	}
+	if counted, taken, err = x.Surface(); taken != "" {
+		taken = "; " + taken
+	}
+	return counted, taken, err
 }
 
 // unneeded is the finding where no distance that is needed is known.

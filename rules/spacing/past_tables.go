@@ -14,20 +14,19 @@ import (
 // pastTables judges a distance in air past the last row of the tables: less than that row
 // asks for is too little, more is unassessed.
 func pastTables(f rule.Finding, s *chain.Spacing, x evidence.Spacing, given document.Given[quantity.Length], why *lack.Lack) rule.Finding {
-	least, err := x.ClearanceAtLeast()
-	counted, taken := given.V, ""
+	ask := x.ClearanceAtLeast
 	if f.Rule == "spacing.creepage" {
-		if least, err = x.CreepageAtLeast(); err == nil {
-			counted, taken, err = x.Surface()
-		}
+		ask = x.CreepageAtLeast
 	}
+	least, err := ask()
 	if err != nil {
 		return f.Lacking(why)
 	}
-	f.Because = fmt.Sprintf("%s; less than %s is too little (%s)", why.Error(), quantity.Text(least.Value), least.Because)
-	if taken != "" {
-		f.Because += "; " + taken
+	counted, taken, err := countedOf(f.Rule, x, given.V)
+	if err != nil {
+		return f.Lacking(err)
 	}
+	f.Because = fmt.Sprintf("%s; less than %s is too little (%s)%s", why.Error(), quantity.Text(least.Value), least.Because, taken)
 	f.Sources = rule.Cited(least.Sources)
 	if !quantity.AtLeast(counted, least.Value) {
 		f.Under = x.Under.Text()

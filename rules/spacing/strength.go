@@ -131,11 +131,7 @@ func judgeCorona(e *evidence.Evidence, s *chain.Spacing) (rule.Finding, string) 
 	if onset.Lack != nil {
 		least, err := x.OnsetAtLeast()
 		if err != nil || x.Computed || !quantity.AtMost(x.Voltages.Peak, least.Value) {
-			f = f.Lacking(onset.Lack)
-			if len(f.Missing) == 0 && !x.Computed && s.Clearance.Set() {
-				f.Remedy = measured(s, "at which voltage a discharge begins in this gap", "keep the peak under it")
-			}
-			return f, ""
+			return noOnset(f, s, x), ""
 		}
 		onset.Answer = least
 	}
@@ -154,6 +150,15 @@ func judgeCorona(e *evidence.Evidence, s *chain.Spacing) (rule.Finding, string) 
 		f.Remedy = againstCorona(s, x)
 	}
 	return f, ""
+}
+
+// noOnset is the finding where no law gives the onset.
+func noOnset(f rule.Finding, s *chain.Spacing, x evidence.Spacing) rule.Finding {
+	f = f.Lacking(x.Assessment.Onset.Lack)
+	if len(f.Missing) == 0 && !x.Computed && s.Clearance.Set() {
+		f.Remedy = measured(s, "at which voltage a discharge begins in this gap", "keep the peak under it")
+	}
+	return f
 }
 
 // quiet reports whether a gap without shape is at or below 2 kV peak and as wide as

@@ -167,8 +167,11 @@ func (n *writer) tables(c digest.Chapter) []Block {
 		if t.Subject != "" {
 			title += ", " + t.Subject
 		}
-		rest := len(t.Rows) - longTable
-		t.Rows = t.Rows[:min(len(t.Rows), longTable)]
+		rest := 0
+		if t.Chapter != exhibit.Plan { // every box to fill in stands on paper
+			rest = max(len(t.Rows)-longTable, 0)
+		}
+		t.Rows = t.Rows[:len(t.Rows)-rest]
 		out, narrow := set(t)
 		out.Title, out.Note, out.Anchor = title, tableNote(t), to
 		if rest > 0 {

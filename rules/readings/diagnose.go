@@ -1,6 +1,7 @@
 package readings
 
 import (
+	"cmp"
 	"math"
 	"slices"
 	"sync"
@@ -56,33 +57,34 @@ func diagnose(e *evidence.Evidence, all []taken, c *Comparison) {
 	trials := b.tryAll(hypotheses(e))
 	c.Tried = len(trials)
 	trials = append(trials, b.between(trials)...)
-	var seen, faint []*trial
-	for i := range trials {
-		t := &trials[i]
-		if t.err == nil && t.misfit < healthy.misfit && t.misfit >= healthy.misfit-alike {
-			faint = append(faint, t)
-		}
-		switch {
-		case t.err != nil:
-			c.Open = append(c.Open, t.name+": "+t.err.Error())
-		case b.misfit(t.predicted, b.healthy) < alike:
-			c.Unseen += t.counts()
-		case t.misfit < healthy.misfit-alike:
-			seen = append(seen, t)
-		}
-	}
-	slices.SortStableFunc(seen, func(x, y *trial) int {
-		switch {
-		case x.misfit < y.misfit:
-			return -1
-		case x.misfit > y.misfit:
-			return 1
-		}
-		return 0
-	})
+	seen, faint := b.sorted(trials, healthy.misfit, c)
 	c.Suspects = b.grouped(seen)
 	b.join(c.Suspects, faint)
 	c.Apart = b.apart(c.Suspects)
+}
+
+// sorted are the hypotheses that explain the readings clearly better than a healthy chain,
+// the best first, and those that do hardly; it notes in the comparison what was not computed
+// and what does not show.
+func (b *bench) sorted(trials []trial, healthy float64, c *Comparison) (seen, faint []*trial) {
+	for i := range trials {
+		t := &trials[i]
+		if t.err != nil {
+			c.Open = append(c.Open, t.name+": "+t.err.Error())
+			continue
+		}
+		if t.misfit < healthy && t.misfit >= healthy-alike {
+			faint = append(faint, t)
+		}
+		switch {
+		case b.misfit(t.predicted, b.healthy) < alike:
+			c.Unseen += t.counts()
+		case t.misfit < healthy-alike:
+			seen = append(seen, t)
+		}
+	}
+	slices.SortStableFunc(seen, func(x, y *trial) int { return cmp.Compare(x.misfit, y.misfit) })
+	return seen, faint
 }
 
 // grouped puts together what these readings cannot tell apart, and keeps the best.

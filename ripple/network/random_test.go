@@ -70,22 +70,6 @@ func TestAnyLadder(t *testing.T) {
 	rapid.Check(t, func(t *rapid.T) { checkAny(t) })
 }
 
-// rounding is the power that rounding alone may leave, however little the rest is: of
-// the energy that the largest capacitance swings with, over hundreds of steps, and of the
-// current of the steepest diode, whose voltage is known to 52 bits.
-func rounding(p *Periodic) float64 {
-	const least = 1e-30 // W: a circuit without a source rests at what is left of numbers
-	peak, roomiest, steepest := float64(p.Circuit.Elements[0].Wave.Amplitude), 0.0, 0.0
-	for i := range p.Circuit.Elements {
-		roomiest = max(roomiest, float64(p.Circuit.Elements[i].Capacitance))
-	}
-	for i := range p.track.diodes {
-		steepest = max(steepest, p.track.diodes[i].on)
-	}
-	charge := (1e-9*p.track.typical + 1e-12*roomiest) * float64(p.Frequency)
-	return peak*peak*(charge+0x1p-52*steepest) + least
-}
-
 // FuzzAnyLadder is the same under the fuzzer: go test -fuzz FuzzAnyLadder ./ripple/network
 func FuzzAnyLadder(f *testing.F) {
 	f.Fuzz(rapid.MakeFuzz(checkAny))
@@ -115,7 +99,7 @@ func checkAny(t *rapid.T) {
 		w := float64(p.Power(e.Name))
 		taken, given = taken+w, given+math.Abs(w)
 	}
-	if math.Abs(taken) > 1e-4*given+rounding(p) {
+	if math.Abs(taken) > 1e-4*given+p.rounding() {
 		t.Errorf("power %g W left of %g W (%+v)", taken, given, p.Work)
 	}
 }

@@ -136,7 +136,10 @@ func (s *search) refine() (*Periodic, error) {
 	after := append([]float64(nil), s.x...)
 	s.returnTo(&before)
 	p.Uncertainty = quantity.Voltage(s.apart(s.x, after))
-	return p, p.plausible()
+	if err := p.plausible(); err != nil {
+		return p, err
+	}
+	return p, p.sober()
 }
 
 // settleFine goes from a state in the rough grade to that in the fine one. Where

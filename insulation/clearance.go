@@ -119,9 +119,6 @@ func electrical(g gap.Gap, v gap.Voltages, field table.Case) ([]demand, error) {
 		return nil, err
 	}
 	steady.raise(factor, "the frequency")
-	if fast(v) {
-		steady.assumed = append(steady.assumed, "the clearance at "+quantity.Text(v.Frequency)+" follows IEC 60664-4, from memory")
-	}
 	asked := []demand{steady}
 	impulse, err := impulseDemand(g, v, field)
 	if err != nil {
@@ -133,7 +130,13 @@ func electrical(g gap.Gap, v gap.Voltages, field table.Case) ([]demand, error) {
 		return nil, err
 	}
 	asked = append(asked, board...)
-	return append(asked, secondaryDemand(g, v.Peak)...), nil
+	asked = append(asked, secondaryDemand(g, v.Peak)...)
+	if Fast(v) { // whichever governs: it does so only if what is remembered asks for less
+		for i := range asked {
+			asked[i].assumed = append(asked[i].assumed, "the clearance at "+quantity.Text(v.Frequency)+" follows IEC 60664-4, from memory")
+		}
+	}
+	return asked, nil
 }
 
 // safetyStep is what the peak is multiplied by before Table F.8 is read: 160 % for

@@ -18,9 +18,9 @@ const (
 	smallAlternating     quantity.Voltage   = 500
 )
 
-// fast reports whether the fast part of the voltage decides: above 30 kHz, more than
+// Fast reports whether the fast part of the voltage decides: above 30 kHz, more than
 // 500 V and more than a fifth of the peak (common practice of this project).
-func fast(v gap.Voltages) bool {
+func Fast(v gap.Voltages) bool {
 	return v.Frequency > lowestHighFrequency && v.Alternating > smallAlternating && v.Alternating > v.Peak/5
 }
 
@@ -30,7 +30,7 @@ func fast(v gap.Voltages) bool {
 // own that was not read, a lack; so are frequencies above 10 MHz.
 func frequencyFactor(g gap.Gap, v gap.Voltages, needed quantity.Length) (table.Reading[quantity.Fraction], error) {
 	none := table.Reading[quantity.Fraction]{Value: 1}
-	if !fast(v) {
+	if !Fast(v) {
 		return none, nil
 	}
 	if v.Frequency > highestHighFrequency {
@@ -69,7 +69,7 @@ func blunt(g gap.Gap, needed quantity.Length) error {
 
 // slowCreepage says that Table 2 of IEC 60664-4 was not read.
 func slowCreepage(v gap.Voltages) []string {
-	if !fast(v) {
+	if !Fast(v) {
 		return nil
 	}
 	return []string{fmt.Sprintf("the creepage at %s is taken as at low frequency: IEC 60664-4 Table 2 was not read", quantity.Text(v.Frequency))}

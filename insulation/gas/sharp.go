@@ -46,6 +46,9 @@ func Needles(s State, d quantity.Length) (gap.Answer[quantity.Voltage], error) {
 	density := s.density25()
 	a, err := normalNeedles(d * quantity.Length(min(1, density/thinnest)))
 	a.Value *= quantity.Voltage(min(max(density, thinnest), densest))
+	if err == nil && density < thinnest*(1-1e-9) {
+		a.Because += ", in air thinner than that of the table by similarity, gap times density"
+	}
 	return sharpened(s, d, a), err
 }
 

@@ -65,7 +65,7 @@ func judgeBreakdown(e *evidence.Evidence, s *chain.Spacing) rule.Finding {
 	f.Sources = append(f.Sources, rule.Cited(cited)...)
 	f = classed(s, x, f)
 	limit := stands.Value * usable(x)
-	f = f.ShareOf(rule.Of(stands.Value)).Most(rule.Of(x.Voltages.Peak), rule.Of(limit), limits.BreakdownShare/limits.BreakdownComfort-1).Assume(stands.Assumptions...).Assume(needlesTaken(s, x)...)
+	f = f.ShareOf(rule.Of(stands.Value)).Most(rule.Of(x.Voltages.Peak), rule.Of(limit), limits.BreakdownShare/limits.BreakdownComfort-1).Assume(stands.Assumptions...).Assume(needlesTaken(s, x)...).Assume(beyond(e, s, x)...)
 	switch {
 	case f.Verdict == rule.Meets:
 	case assumedOnly(f, limits.BreakdownShare/limits.BreakdownComfort-1):
@@ -138,7 +138,7 @@ func judgeCorona(e *evidence.Evidence, s *chain.Spacing) (rule.Finding, string) 
 	f.Under = x.Under.Text()
 	f.Sources = append(append(rule.Cited(onset.Sources), coronaSource), shown(onset.Answer)...)
 	f.Because = fmt.Sprintf("%s across a gap where discharge is expected from %s (%s)", quantity.Text(x.Voltages.Peak), quantity.Text(onset.Value), onset.Because)
-	f = f.Most(rule.Of(x.Voltages.Peak), rule.Of(onset.Value), limits.DistanceMargin).Assume(onset.Assumptions...)
+	f = f.Most(rule.Of(x.Voltages.Peak), rule.Of(onset.Value), limits.DistanceMargin).Assume(onset.Assumptions...).Assume(beyond(e, s, x)...)
 	if f.Verdict == rule.Fails {
 		f.Verdict = rule.Marginal
 	}

@@ -53,7 +53,7 @@ earthing_rod = { resistance = "100 kohm" }
 	within(t, "time", *node[5].Value, 1e9*10e-9*math.Log(2)+1e9*20e-9*math.Log(2500/60.), 1e-2)
 	rod := lineOf(t, tableOf(t, r, "energy.rod"), "stage.1")
 	within(t, "peak", *rod[2].Value, 5000/100e3, 2e-3)
-	within(t, "rod time", *rod[4].Value, 100e3*15e-9*math.Log(5000/60.), 1e-2)
+	within(t, "rod time", *rod[3].Value, 100e3*10e-9*math.Log(2)+100e3*20e-9*math.Log(2500/60.), 1e-2)
 	back := lineOf(t, tableOf(t, r, "energy.recharge"), "multiplier.smoothing_capacitor.1")
 	within(t, "back", *back[3].Value, 0.006*5000, 2e-3)
 }

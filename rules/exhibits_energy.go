@@ -159,15 +159,15 @@ func rodTable(e *evidence.Evidence) []exhibit.Table {
 		return nil
 	}
 	t := exhibit.Table{
-		ID: "energy.rod", Chapter: exhibit.Energy, Title: "The earthing rod at each node", Basis: "R C discharge of what a short there delivers",
-		Columns: []exhibit.Column{{Head: "node"}, {Head: "voltage", Unit: "V"}, {Head: "peak current", Unit: "A"}, {Head: "time constant", Unit: "s"}, {Head: "to 60 V", Unit: "s"}, {Head: "energy", Unit: "J"}},
-		Note:    under(e) + "Touch every node in turn, from the earthy end to the hot end, then clip each; leave the earth on.",
+		ID: "energy.rod", Chapter: exhibit.Energy, Title: "The earthing rod at each node", Basis: "decay of the whole network with the rod on one node",
+		Columns: []exhibit.Column{{Head: "node"}, {Head: "voltage", Unit: "V"}, {Head: "peak current", Unit: "A"}, {Head: "node to 60 V", Unit: "s"}, {Head: "all to 60 V", Unit: "s"}, {Head: "energy", Unit: "J"}},
+		Note:    under(e) + "All to 60 V is the time after which no node comes back when the rod is lifted, absorption apart. Touch every node in turn, from the earthy end to the hot end, then clip each; leave the earth on.",
 	}
 	for _, node := range e.Nodes() {
 		r, err := e.Reachable(node)
 		x, err2 := e.Rod(node)
 		if first(err, err2) == nil {
-			t.Rows = append(t.Rows, []exhibit.Cell{exhibit.Words(node), exhibit.Number(r.Voltage), exhibit.Number(x.Peak), exhibit.Number(x.TimeConstant), exhibit.Number(x.Time), exhibit.Number(x.Energy)})
+			t.Rows = append(t.Rows, []exhibit.Cell{exhibit.Words(node), exhibit.Number(r.Voltage), exhibit.Number(x.Peak), lasting(x.Node, nil), lasting(x.Whole, nil), exhibit.Number(x.Energy)})
 		}
 	}
 	return table(t)

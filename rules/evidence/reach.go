@@ -32,16 +32,43 @@ func (e *Evidence) Reachable(node string) (Reachable, error) {
 	return Reachable{node, v, s, c}, err
 }
 
-// Rod is what the described earthing rod goes through at a node: the peak by its voltage,
-// the energy by what a short there releases, both at most.
-func (e *Evidence) Rod(node string) (touch.Earthing, error) {
-	r, err := e.Reachable(node)
-	if err != nil {
-		return touch.Earthing{}, err
-	}
-	x, err := touch.Earth(r.Capacitance, r.Voltage, e.chain.Access.EarthingRod.Resistance.V)
-	x.Energy = r.Short.Energy
-	return x, err
+// Rodded is what the earthing rod goes through at a node, and how long it has to stay on.
+type Rodded struct {
+	touch.Earthing
+	Node  Discharge // of the node, the rod on it
+	Whole Discharge // of the last node of the chain, the rod still there
+}
+
+// Rod is the earthing rod at a node, drive off: the times are those of the whole network,
+// for what hangs behind a filter resistor comes through that.
+func (e *Evidence) Rod(node string) (Rodded, error) {
+	return remember(e, "rod at "+node, func() (Rodded, error) {
+		r, err := e.Reachable(node)
+		if err != nil {
+			return Rodded{}, err
+		}
+		rod := e.chain.Access.EarthingRod.Resistance.V
+		x, err := touch.Earth(r.Capacitance, r.Voltage, rod)
+		if err != nil {
+			return Rodded{}, err
+		}
+		x.Energy = r.Short.Energy
+		c, err := e.Circuit()
+		if err != nil {
+			return Rodded{}, err
+		}
+		v, err := e.means()
+		if err != nil {
+			return Rodded{}, err
+		}
+		earthed := c.Earthed(node, rod)
+		d, err := steady.Discharge(earthed, v.Carry(c, earthed), discharged)
+		if err != nil {
+			return Rodded{}, err
+		}
+		own, err := d.Node(node)
+		return Rodded{x, discharge(own), discharge(d.Slowest())}, err
+	})
 }
 
 // Shock is what a body would take at a node, as information.

@@ -137,7 +137,7 @@ func which(e *evidence.Evidence, part string) string {
 const nothing quantity.Voltage = 1
 
 func shown(e *evidence.Evidence, o evidence.Opened, d evidence.Discharge) exhibit.Cell {
-	if e.Chain().Divider == nil {
+	if d := e.Chain().Divider; d == nil || d.Meter == nil {
 		return exhibit.Words("there is no meter")
 	}
 	v, err := e.MeterAfter(o, d)

@@ -77,7 +77,9 @@ func (e *Evidence) Shock(node string, body touch.Body) (touch.Shock, error) {
 	if err != nil {
 		return touch.Shock{}, err
 	}
-	return touch.Through(r.Capacitance, r.Voltage, body.Resistance)
+	x, err := touch.Through(r.Capacitance, r.Voltage, body.Resistance)
+	x.Energy = min(x.Energy, r.Short.Energy) // what is charged in series gives its charge at less than the whole voltage
+	return x, err
 }
 
 // Unplugged is the discharge of a node with the drive unplugged: the columns have no way

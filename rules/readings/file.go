@@ -107,7 +107,7 @@ func (c *checker) reading(s *plan.Step, r *Reading, read map[string]bool) {
 	case errors.As(err, &refusal):
 		c.fault(r.Value.Place, fmt.Sprintf("%q: %s", r.Value.V, refusal.What), refusal.Remedy)
 	case v < 0:
-		c.fault(r.Value.Place, fmt.Sprintf("%q is below zero", r.Value.V), "readings are magnitudes; a wrong sign is a reason to stop, not a reading")
+		c.fault(r.Value.Place, fmt.Sprintf("%q is below zero", r.Value.V), "readings are magnitudes: write it without its sign; a sign other than that of the chain is a reason to stop, not a reading")
 	case v > impossible*expected.Value && v > impossible*expected.High:
 		c.fault(r.Value.Place, fmt.Sprintf("%q where %s is expected", r.Value.V, d.Text(expected.Value)), "look at the unit and at the range of the instrument")
 	}

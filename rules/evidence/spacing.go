@@ -2,7 +2,6 @@ package evidence
 
 import (
 	"kilovet/hv/chain"
-	"kilovet/hv/circuit"
 	"kilovet/hv/document"
 	"kilovet/hv/quantity"
 	"kilovet/insulation"
@@ -72,7 +71,7 @@ func (e *Evidence) spacingInFault(s *chain.Spacing) (Spacing, error) {
 	if err != nil || s.Voltage.Set() {
 		return usual, err
 	}
-	peak, err := Largest(e, e.Ratings(), nodesOf(s), func(e *Evidence, n string) (quantity.Voltage, error) { return e.Between(n, s.To.V) })
+	peak, err := Largest(e, e.Ratings(), nodesOf(s), func(e *Evidence, n string) (quantity.Voltage, error) { return e.peakOver(n, s.To.V) })
 	if err != nil || quantity.AtMost(peak.Value, usual.Voltages.Peak) {
 		return usual, err
 	}
@@ -93,11 +92,11 @@ func (e *Evidence) across(s *chain.Spacing) (v gap.Voltages, under, long Conditi
 		return gap.Voltages{Peak: s.Voltage.V, LongTerm: s.Voltage.V, Sharp: gap.Polarity(s.SharperElectrode.V)}, under, long, nil
 	}
 	live := nodesOf(s)
-	peak, err := Worst(e, live, func(e *Evidence, n string) (quantity.Voltage, error) { return e.Between(n, s.To.V) })
+	peak, err := Worst(e, live, func(e *Evidence, n string) (quantity.Voltage, error) { return e.peakOver(n, s.To.V) })
 	if err != nil {
 		return v, under, long, err
 	}
-	lasting, err := Largest(e, LongTerm(), live, func(e *Evidence, n string) (quantity.Voltage, error) { return e.RMS(n, s.To.V) })
+	lasting, err := Largest(e, LongTerm(), live, func(e *Evidence, n string) (quantity.Voltage, error) { return e.lastingOver(n, s.To.V) })
 	if err != nil {
 		return v, under, long, err
 	}
@@ -169,25 +168,4 @@ func shapeOf(s *chain.Shape) *gap.Shape {
 	}
 	return &gap.Shape{Kind: gap.Kind(s.Kind.V), InnerRadius: s.InnerRadius.V, OuterRadius: s.OuterRadius.V,
 		Radius: s.Radius.V, TipRadius: s.TipRadius.V, EdgeRadius: s.EdgeRadius.V, Symmetric: !s.Earthed.Or(true)}
-}
-
-// mains is the supply whose transients reach a spacing: that of one which touches
-// mains or drive.
-func (e *Evidence) mains(s *chain.Spacing) *gap.Mains {
-	touches := func(name string) bool {
-		n, ok := e.Layout().Node(name)
-		if !ok || n == circuit.Ground {
-			return false
-		}
-		for _, source := range []string{"mains", "drive", "drive.a", "drive.b"} {
-			if m, ok := e.Layout().Node(source); ok && m == n {
-				return true
-			}
-		}
-		return name == "mains"
-	}
-	if e.chain.Site == nil || !touches(s.From.V) && !touches(s.To.V) {
-		return nil
-	}
-	return &gap.Mains{LineToNeutral: e.chain.Site.Mains.V, Category: e.chain.Site.OvervoltageCategory.V, Secondary: s.From.V != "mains" && s.To.V != "mains"}
 }

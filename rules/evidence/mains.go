@@ -1,0 +1,84 @@
+package evidence
+
+import (
+	"math"
+
+	"kilovet/hv/chain"
+	"kilovet/hv/circuit"
+	"kilovet/hv/lack"
+	"kilovet/hv/quantity"
+	"kilovet/insulation/gap"
+)
+
+// peakOver is the largest voltage between two nodes that a spacing between them is judged
+// by. On the mains it is that of its live conductor: the common mode of a heater feed
+// tells only of its earthed side and counts where it is larger.
+func (e *Evidence) peakOver(a, b string) (quantity.Voltage, error) {
+	peak, err := e.Between(a, b)
+	if err != nil || !e.onMains(a) && !e.onMains(b) {
+		return peak, err
+	}
+	stated, err := e.mainsPeak()
+	if err != nil {
+		return 0, err
+	}
+	line, err := e.lineVoltage()
+	return peak + max(0, line*math.Sqrt2-stated), err
+}
+
+// lastingOver is the r.m.s. voltage between two nodes that a spacing between them is
+// judged by. That of the mains has another frequency than what the steady state holds:
+// their squares add.
+func (e *Evidence) lastingOver(a, b string) (quantity.Voltage, error) {
+	rms, err := e.RMS(a, b)
+	if err != nil || !e.onMains(a) && !e.onMains(b) {
+		return rms, err
+	}
+	stated, err := e.mainsPeak()
+	if err != nil {
+		return 0, err
+	}
+	line, err := e.lineVoltage()
+	return quantity.Voltage(math.Hypot(float64(rms), float64(max(line, stated/math.Sqrt2)))), err
+}
+
+// lineVoltage is the r.m.s. voltage of the live conductor of the mains to ground.
+func (e *Evidence) lineVoltage() (quantity.Voltage, error) {
+	if e.chain.Site == nil || !e.chain.Site.Mains.Set() {
+		return 0, lack.Key("site.mains")
+	}
+	return e.chain.Site.Mains.V, nil
+}
+
+// onMains reports whether a node is that of the mains.
+func (e *Evidence) onMains(name string) bool {
+	return name == mainsNode || e.sameNode(name, mainsNode)
+}
+
+// sameNode reports whether two names are one node other than ground.
+func (e *Evidence) sameNode(a, b string) bool {
+	na, ok := e.Layout().Node(a)
+	nb, ok2 := e.Layout().Node(b)
+	return ok && ok2 && na == nb && na != circuit.Ground
+}
+
+// mains is the supply whose transients reach a spacing: that of one any node of which is
+// mains or drive. It is a secondary circuit's where drive stands without the mains.
+func (e *Evidence) mains(s *chain.Spacing) *gap.Mains {
+	reached, secondary := false, false
+	for _, n := range nodesOf(s) {
+		line := e.onMains(n) || e.onMains(s.To.V)
+		driven := e.atDrive(n) || e.atDrive(s.To.V)
+		reached = reached || line || driven
+		secondary = secondary || driven && !line
+	}
+	if e.chain.Site == nil || !reached {
+		return nil
+	}
+	return &gap.Mains{LineToNeutral: e.chain.Site.Mains.V, Category: e.chain.Site.OvervoltageCategory.V, Secondary: secondary}
+}
+
+// atDrive reports whether a node is one of the drive.
+func (e *Evidence) atDrive(name string) bool {
+	return e.sameNode(name, "drive") || e.sameNode(name, "drive.a") || e.sameNode(name, "drive.b")
+}

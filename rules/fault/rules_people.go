@@ -155,12 +155,17 @@ var reached = rule.Rule{
 	},
 }
 
-// withinReach are the nodes that can be touched in any fault, each once.
+// withinReach are the nodes that can be touched in any fault, each once: every one that is
+// listed, and those that only a fault lifts; of these the return not in a closed enclosure.
 func withinReach(e *evidence.Evidence) []string {
+	access := e.Chain().Access
+	lifted := []string{circuit.Chassis, "cable.screen"}
+	if !access.Enclosure.Set() || access.Enclosure.V == "open" {
+		lifted = append(lifted, "foot")
+	}
 	var all []string
-	for _, node := range append(slices.Clone(e.Chain().Access.Touchable.V), "chassis", "cable.screen", "foot") {
-		closed := e.Chain().Access.Enclosure.Set() && e.Chain().Access.Enclosure.V != "open"
-		if !slices.Contains(all, node) && (node != "foot" || !closed) {
+	for _, node := range append(slices.Clone(access.Touchable.V), lifted...) {
+		if !slices.Contains(all, node) {
 			all = append(all, node)
 		}
 	}

@@ -2,6 +2,7 @@ package fault_test
 
 import (
 	"slices"
+	"strings"
 	"testing"
 
 	"kilovet/rules/evidence"
@@ -29,7 +30,7 @@ func TestAListedReturnIsWithinReach(t *testing.T) {
 			i := slices.IndexFunc(j.Findings, func(f rule.Finding) bool { return f.Subject == "foot" })
 			if (i >= 0) != there {
 				t.Errorf("%s, listed [%s]: judged %v", enclosure, listed, i >= 0)
-			} else if there && j.Findings[i].Verdict != rule.Fails {
+			} else if there && !strings.Contains(j.Findings[i].Because, "multiplier return open: foot reaches") {
 				t.Errorf("%s, listed [%s]: %+v", enclosure, listed, j.Findings[i])
 			}
 		}

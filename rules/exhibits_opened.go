@@ -136,8 +136,13 @@ func which(e *evidence.Evidence, part string) string {
 // nothing is below what a meter of high voltage shows.
 const nothing quantity.Voltage = 1
 
+func noMeter(e *evidence.Evidence) bool {
+	d := e.Chain().Divider
+	return d == nil || d.Meter == nil
+}
+
 func shown(e *evidence.Evidence, o evidence.Opened, d evidence.Discharge) exhibit.Cell {
-	if d := e.Chain().Divider; d == nil || d.Meter == nil {
+	if noMeter(e) {
 		return exhibit.Words("there is no meter")
 	}
 	v, err := e.MeterAfter(o, d)
@@ -168,7 +173,7 @@ func comebackAtNodes(e *evidence.Evidence) []exhibit.Table {
 // metered says what the meter shows of what came back at a node.
 func metered(e *evidence.Evidence, node string) string {
 	switch d := e.Chain().Divider; {
-	case d == nil:
+	case noMeter(e):
 		return "there is no meter"
 	case e.Same(node, d.Senses.Or("output")) && d.Permanent.V:
 		return "nothing: the divider leads it away as it comes"

@@ -69,13 +69,6 @@ func (c *Circuit) With(name string, edit func(*Element)) *Circuit {
 	return b.circuit()
 }
 
-// Earthed is the circuit with an earthing rod on one node.
-func (c *Circuit) Earthed(node string, rod quantity.Resistance) *Circuit {
-	b := c.rebuild()
-	b.add(Element{Name: "earthing rod", Kind: Resistor, Role: Load, Resistance: rod, Permanent: true}, node, "ground")
-	return b.circuit()
-}
-
 // Each is the circuit with every element changed by an edit; an element for which
 // the edit reports false is left out.
 func (c *Circuit) Each(edit func(*Element) bool) *Circuit {

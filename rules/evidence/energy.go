@@ -27,6 +27,16 @@ func (e *Evidence) means() (steady.Voltages, error) {
 	})
 }
 
+// charged is the circuit with the mean potentials of its nodes.
+func (e *Evidence) charged() (*circuit.Circuit, steady.Voltages, error) {
+	c, err := e.Circuit()
+	if err != nil {
+		return nil, nil, err
+	}
+	v, err := e.means()
+	return c, v, err
+}
+
 // Stored is the energy of one part.
 type Stored struct {
 	Name   string
@@ -35,11 +45,7 @@ type Stored struct {
 
 // StoredByPart is the energy in every capacitor whose capacitance is known.
 func (e *Evidence) StoredByPart() ([]Stored, error) {
-	c, err := e.Circuit()
-	if err != nil {
-		return nil, err
-	}
-	v, err := e.means()
+	c, v, err := e.charged()
 	if err != nil {
 		return nil, err
 	}
@@ -54,11 +60,7 @@ func (e *Evidence) StoredByPart() ([]Stored, error) {
 
 // StoredEnergy is the energy in the whole chain.
 func (e *Evidence) StoredEnergy() (quantity.Energy, error) {
-	c, err := e.Circuit()
-	if err != nil {
-		return 0, err
-	}
-	v, err := e.means()
+	c, v, err := e.charged()
 	if err != nil {
 		return 0, err
 	}
@@ -108,11 +110,7 @@ func (e *Evidence) shorts() (map[string]outcome[Short], error) {
 
 // shorted are the shorts at the given nodes.
 func (e *Evidence) shorted(nodes []string) (map[string]outcome[Short], error) {
-	c, err := e.Circuit()
-	if err != nil {
-		return nil, err
-	}
-	v, err := e.means()
+	c, v, err := e.charged()
 	if err != nil {
 		return nil, err
 	}
@@ -218,11 +216,7 @@ func discharge(x steady.Ending) Discharge {
 
 func (e *Evidence) decay() (*steady.Decay, error) {
 	return remember(e, "decay", func() (*steady.Decay, error) {
-		c, err := e.Circuit()
-		if err != nil {
-			return nil, err
-		}
-		v, err := e.means()
+		c, v, err := e.charged()
 		if err != nil {
 			return nil, err
 		}
@@ -259,11 +253,7 @@ type Opened struct {
 // OneOpen is the discharge with each diode and each permanent resistor open in turn.
 func (e *Evidence) OneOpen() ([]Opened, error) {
 	return remember(e, "one open", func() ([]Opened, error) {
-		c, err := e.Circuit()
-		if err != nil {
-			return nil, err
-		}
-		v, err := e.means()
+		c, v, err := e.charged()
 		if err != nil {
 			return nil, err
 		}

@@ -4,7 +4,6 @@ import (
 	"math"
 
 	"kilovet/hv/chain"
-	"kilovet/hv/circuit"
 	"kilovet/hv/lack"
 	"kilovet/hv/quantity"
 	"kilovet/insulation/gap"
@@ -52,14 +51,12 @@ func (e *Evidence) lineVoltage() (quantity.Voltage, error) {
 
 // onMains reports whether a node is that of the mains.
 func (e *Evidence) onMains(name string) bool {
-	return name == mainsNode || e.sameNode(name, mainsNode)
+	return e.sameNode(name, mainsNode)
 }
 
 // sameNode reports whether two names are one node other than ground.
 func (e *Evidence) sameNode(a, b string) bool {
-	na, ok := e.Layout().Node(a)
-	nb, ok2 := e.Layout().Node(b)
-	return ok && ok2 && na == nb && na != circuit.Ground
+	return e.Same(a, b) && !e.IsGround(a)
 }
 
 // mains is the supply whose transients reach a spacing: that of one any node of which is

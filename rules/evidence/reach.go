@@ -34,9 +34,10 @@ func (e *Evidence) Reachable(node string) (Reachable, error) {
 
 // Rodded is what the earthing rod goes through at a node, and how long it has to stay on.
 type Rodded struct {
-	touch.Earthing
-	Node  Discharge // of the node, the rod on it
-	Whole Discharge // of the last node of the chain, the rod still there
+	Peak   quantity.Current
+	Energy quantity.Energy // at most: what a short there releases
+	Node   Discharge       // of the node, the rod on it
+	Whole  Discharge       // of the last node of the chain, the rod still there
 }
 
 // Rod is the earthing rod at a node, drive off: the times are those of the whole network,
@@ -48,26 +49,22 @@ func (e *Evidence) Rod(node string) (Rodded, error) {
 			return Rodded{}, err
 		}
 		rod := e.chain.Access.EarthingRod.Resistance.V
-		x, err := touch.Earth(r.Capacitance, r.Voltage, rod)
+		peak, err := touch.Current(r.Voltage, rod, 0)
 		if err != nil {
 			return Rodded{}, err
 		}
-		x.Energy = r.Short.Energy
-		c, err := e.Circuit()
+		c, v, err := e.charged()
 		if err != nil {
 			return Rodded{}, err
 		}
-		v, err := e.means()
-		if err != nil {
-			return Rodded{}, err
-		}
-		earthed := c.Earthed(node, rod)
+		const name = "earthing rod"
+		earthed := c.Bridge(name, node, "ground", rod).With(name, func(el *circuit.Element) { el.Permanent = true })
 		d, err := steady.Discharge(earthed, v.Carry(c, earthed), discharged)
 		if err != nil {
 			return Rodded{}, err
 		}
 		own, err := d.Node(node)
-		return Rodded{x, discharge(own), discharge(d.Slowest())}, err
+		return Rodded{peak, r.Short.Energy, discharge(own), discharge(d.Slowest())}, err
 	})
 }
 
@@ -86,11 +83,7 @@ func (e *Evidence) Shock(node string, body touch.Body) (touch.Shock, error) {
 // to ground through it.
 func (e *Evidence) Unplugged(node string) (Discharge, error) {
 	d, err := remember(e, "decay, drive unplugged", func() (*steady.Decay, error) {
-		c, err := e.Circuit()
-		if err != nil {
-			return nil, err
-		}
-		v, err := e.means()
+		c, v, err := e.charged()
 		if err != nil {
 			return nil, err
 		}

@@ -32,11 +32,7 @@ func (e *Evidence) recovered() ([]quantity.Voltage, error) {
 		if err != nil {
 			return nil, err
 		}
-		c, err := e.Circuit()
-		if err != nil {
-			return nil, err
-		}
-		v, err := e.means()
+		c, v, err := e.charged()
 		if err != nil {
 			return nil, err
 		}

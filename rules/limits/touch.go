@@ -41,6 +41,7 @@ var (
 const (
 	BondResistance  quantity.Resistance = 0.1
 	BondTestCurrent quantity.Current    = 25
+	RodCurrent      quantity.Current    = 5
 )
 
 // The sources of the rules about discharge, earthing and access.
@@ -49,6 +50,7 @@ var (
 	InteriorSource   = rule.Source{Text: "IEC 61010-1: interior parts 10 s, otherwise a warning with the waiting time", Mark: rule.Memory}
 	RedundancySource = practice("two independent strings, each alone meeting the time: one open element must not leave the charge")
 	RodSource        = rule.Source{Text: "NIST EEEL, Safety Rules for Moderate and High Voltages (2008), as repeated by hanoverlabs.com: a resistor stick first, then a solid ground left on; energy rating above the stored energy (pupman.com, 2002)", Mark: rule.Read, Governs: true}
+	RodCurrentSource = practice("a rod is sized for a peak of a few amperes, kilo-ohms (pupman.com, 2002, read); 5 A is a decision of this review")
 	BondSource       = rule.Source{Text: "IEC 61010-1 6.5: protective bonding at most 0.1 ohm at 25 A", Mark: rule.Read, Governs: true}
 	TwoBondsSource   = practice("two separate earth bonds: loss of one must not lift the enclosure to high voltage")
 	InterlockSource  = rule.Source{Text: "two interlocks a door, restart by a deliberate act only (radiation control rules, quoting 21 CFR 1020.40)", Mark: rule.Read, Governs: true}

@@ -3,6 +3,7 @@ package people
 import (
 	"fmt"
 
+	"kilovet/hv/chain"
 	"kilovet/hv/lack"
 	"kilovet/hv/quantity"
 	body "kilovet/hv/touch"
@@ -15,8 +16,9 @@ var rod = rule.Rule{
 	ID: "rod.there", Title: "Earthing rod",
 	Demands: "There is a resistor rod to discharge nodes by hand.",
 	Applies: "Where a node holds more charge or energy than may be touched.",
+	Margin:  "marginal where more than 5 A begin to flow through it; a rod without resistance fails",
 	Concern: rule.Life,
-	Sources: []rule.Source{limits.RodSource},
+	Sources: []rule.Source{limits.RodSource, limits.RodCurrentSource},
 	Example: rule.Example{
 		Swaps: []rule.Swap{{Was: `earthing_rod    = { resistance = "100 kohm", rated_voltage = "50 kV", rated_energy = "20 J" }`, Becomes: ""}},
 		Changes: []rule.Change{
@@ -36,11 +38,42 @@ var rod = rule.Rule{
 		}
 		f.Place = access.Here()
 		f.Because, f.Remedy = "no earthing rod is described", "provide a resistor rod rated for voltage and energy, and describe it as access.earthing_rod"
-		if access.EarthingRod != nil {
-			f.Because, f.Place = "an earthing rod is described", access.EarthingRod.Here()
+		if access.EarthingRod == nil {
+			return *only(f.There(false))
 		}
-		return *only(f.There(access.EarthingRod != nil).WithoutRemedyIfMet())
+		return *only(resisting(e, access.EarthingRod, f))
 	},
+}
+
+// resisting judges a rod by what it begins with at the highest node. Where no voltage is
+// known rod.voltage says so.
+func resisting(e *evidence.Evidence, r *chain.EarthingRod, f rule.Finding) rule.Finding {
+	f.Place, f.Because = r.Here(), "an earthing rod is described"
+	f.Remedy = "use a rod of kilo-ohms, so that a few amperes begin to flow"
+	if r.Resistance.V == 0 {
+		f.Because = "the rod that is described has no resistance: nothing limits the current of a discharge"
+		return f.There(false)
+	}
+	most, err := highest(e)
+	if err != nil {
+		return f.There(true).WithoutRemedyIfMet()
+	}
+	i, err := body.Current(most.Value, r.Resistance.V, 0)
+	if err != nil {
+		return f.Lacking(err)
+	}
+	f.Because += "; " + quantity.Text(i) + " begin to flow through it"
+	f = f.There(true)
+	if !quantity.AtMost(i, limits.RodCurrent) {
+		f.Sources = append(f.Sources, limits.RodCurrentSource)
+		f = f.Assume("the rod, what it is put to and whoever holds it bear " + quantity.Text(i) + "; a few amperes are practice")
+	}
+	return f.WithoutRemedyIfMet()
+}
+
+// highest is the node that reaches most to ground, in any state and corner.
+func highest(e *evidence.Evidence) (evidence.Extreme[quantity.Voltage], error) {
+	return evidence.Worst(e, e.Nodes(), func(e *evidence.Evidence, n string) (quantity.Voltage, error) { return e.Between(n, "ground") })
 }
 
 var oneOpen = rule.Rule{
@@ -149,7 +182,7 @@ var rodVoltage = rule.Rule{
 		if !r.RatedVoltage.Set() {
 			return *only(f.Lacking(lack.Key(r.RatedVoltage.Key)))
 		}
-		most, err := evidence.Worst(e, e.Nodes(), func(e *evidence.Evidence, n string) (quantity.Voltage, error) { return e.Between(n, "ground") })
+		most, err := highest(e)
 		if err != nil {
 			return *only(f.Lacking(err))
 		}

@@ -33,6 +33,9 @@ var computed = rule.Rule{
 			{Rule: "fault.computed", Subject: "bias.resistor shorted", Verdict: rule.Unassessed},
 			{Rule: "fault.computed", Subject: "bias.bypass shorted", Verdict: rule.Unassessed},
 			{Rule: "fault.computed", Subject: "bias.clamp shorted", Verdict: rule.Unassessed},
+			{Rule: "fault.rating", Subject: "chain", Verdict: rule.Unassessed},
+			{Rule: "fault.spacing", Subject: notComputed, Verdict: rule.Unassessed},
+			{Rule: "fault.touch", Subject: notComputed, Verdict: rule.Unassessed},
 			{Rule: "gun.emission_law", Subject: "gun"},
 			{Rule: "gun.regulation", Subject: "gun", Verdict: rule.Unassessed},
 		},
@@ -220,6 +223,9 @@ func summary(e *evidence.Evidence, findings []rule.Finding) rule.Finding {
 	}
 	f.Because = fmt.Sprintf("of %d classes of faults %d take another part above its rating; of these an independent trip catches %d",
 		len(classes(StudyAll(e))), len(findings), caught)
+	if err := uncomputed(StudyAll(e)); err != nil {
+		return f.Lacking(err)
+	}
 	if met == len(findings) {
 		return f.There(true)
 	}

@@ -39,16 +39,18 @@ func judgeStandingArc(e *evidence.Evidence) rule.Judgement {
 		return rule.Over(noSupply)
 	}
 	arcs := slices.DeleteFunc(slices.Clone(StudyAll(e)), func(o Outcome) bool { return o.Class != "arc" })
-	var j rule.Judgement
-	for _, part := range inTheWay(e) {
-		if f, found := judgeInTheWay(part, arcs); found {
-			j.Findings = append(j.Findings, f)
+	parts := inTheWay(e)
+	if len(parts) == 0 {
+		return rule.Over("no series resistor is described")
+	}
+	var found []rule.Finding
+	for _, part := range parts {
+		if f, raised := judgeInTheWay(part, arcs); raised {
+			found = append(found, f)
 		}
 	}
-	if len(j.Findings) == 0 {
-		return rule.Over("no arc puts more power into a series resistor than working does")
-	}
-	return j
+	return withUnknown(found, rule.Finding{Rule: "series.arc_power", Concern: rule.Equipment, Sources: []rule.Source{limits.FaultSource, standingSource}},
+		arcs, "no arc puts more power into a series resistor than working does")
 }
 
 // inTheWay names the series resistors that are described as parts, in the order of the

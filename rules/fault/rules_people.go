@@ -30,17 +30,28 @@ var gaps = rule.Rule{
 		if !e.HasSupply() {
 			return rule.Over(noSupply)
 		}
-		var j rule.Judgement
-		for i := range e.Chain().Spacings {
-			if f, raised := judgeGap(e, &e.Chain().Spacings[i]); raised {
-				j.Findings = append(j.Findings, f)
-			}
-		}
-		if len(j.Findings) == 0 {
-			return rule.Over("no fault puts more across a described spacing than the states of the chain do")
-		}
-		return j
+		return judgeGaps(e)
 	},
+}
+
+func judgeGaps(e *evidence.Evidence) rule.Judgement {
+	var found []rule.Finding
+	nothing := "no fault puts more across a described spacing than the states of the chain do"
+	all := e.Chain().Spacings
+	for i := range all {
+		f, raised := judgeGap(e, &all[i])
+		if raised {
+			found = append(found, f)
+			continue
+		}
+		if _, err := e.Spacing(&all[i]); err != nil {
+			nothing = "what a fault puts across a spacing is not known where its voltage is not, which the rules of that spacing say"
+		}
+	}
+	if len(all) == 0 {
+		return rule.Over("no spacing is described")
+	}
+	return withUnknown(found, rule.Finding{Rule: "fault.spacing", Concern: rule.Life, Sources: []rule.Source{faultSource}}, StudyAll(e), nothing)
 }
 
 // judgeGap is the worst that any fault does to one spacing.
@@ -148,10 +159,8 @@ var reached = rule.Rule{
 				j.Findings = append(j.Findings, f)
 			}
 		}
-		if len(j.Findings) == 0 {
-			return rule.Over("no node is within reach")
-		}
-		return j
+		return withUnknown(j.Findings, rule.Finding{Rule: "fault.touch", Concern: rule.Life, Place: e.Chain().Access.Touchable.Place,
+			Sources: []rule.Source{limits.TouchFaultSource}}, StudyAll(e), "no node is within reach")
 	},
 }
 

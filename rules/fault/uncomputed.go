@@ -1,0 +1,47 @@
+package fault
+
+import (
+	"fmt"
+
+	"kilovet/hv/lack"
+	"kilovet/rules/rule"
+)
+
+// uncomputed is the lack of what was not computed among some faults, nil where all were:
+// what follows from those is not known, and no rule over all of them is met.
+func uncomputed(all []Outcome) error {
+	var first Outcome
+	n := 0
+	for _, o := range all {
+		if o.Err == nil {
+			continue
+		}
+		if n++; n == 1 {
+			first = o
+		}
+	}
+	if n == 0 {
+		return nil
+	}
+	why := fmt.Sprintf("%d of %d faults were not computed, first %s: %v", n, len(all), first.Name, first.Err)
+	if l := lack.Of(first.Err); l != nil {
+		return &lack.Lack{Kind: l.Kind, Keys: l.Keys, Why: why}
+	}
+	return lack.Failed("%s", why)
+}
+
+// notComputed is the subject of what is said of faults that were not computed.
+const notComputed = "faults not computed"
+
+// withUnknown adds to the findings of a rule the one about the faults that were not
+// computed; where nothing is found at all, the rule is passed over with a reason.
+func withUnknown(found []rule.Finding, about rule.Finding, all []Outcome, nothing string) rule.Judgement {
+	if err := uncomputed(all); err != nil {
+		about.Subject, about.Relation = notComputed, rule.Presence
+		found = append(found, about.Lacking(err))
+	}
+	if len(found) == 0 {
+		return rule.Over(nothing)
+	}
+	return rule.Judgement{Findings: found}
+}

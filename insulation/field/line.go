@@ -3,6 +3,7 @@ package field
 import (
 	"math"
 	"math/cmplx"
+	"slices"
 
 	"kilovet/hv/lack"
 	"kilovet/hv/quantity"
@@ -36,25 +37,55 @@ func (f *Field) Line(from Peak) (Line, error) {
 }
 
 // Within is the field line from the place of a peak, on an electrode or on a dielectric,
-// through the body that the peak lies in, to where it leaves that body.
-func (f *Field) Within(from Peak) (Line, error) { return f.lineFrom(from, true) }
+// through the body that the peak lies in, to where it leaves that body. Where the peak lies
+// on a surface that the line runs along it is the whole line, from its other end on.
+func (f *Field) Within(from Peak) (Line, error) {
+	line, err := f.lineFrom(from, true)
+	if err != nil || !f.tangent(from) {
+		return line, err
+	}
+	back, err := f.followed(from, true, true)
+	return line.after(back), err
+}
+
+// tangent reports whether the field at a peak runs along the surface that it lies on.
+func (f *Field) tangent(p Peak) bool { return f.footOf(p).grazes() }
+
+// after is a line with the way back from its start before it.
+func (l Line) after(back Line) Line {
+	if len(back.Points) == 0 {
+		return l
+	}
+	whole := Line{Ends: l.Ends, Closed: l.Closed}
+	before := back.Points[len(back.Points)-1].Along
+	for _, p := range slices.Backward(back.Points) {
+		p.Along = before - p.Along
+		whole.Points = append(whole.Points, p)
+	}
+	for _, p := range l.Points[1:] {
+		p.Along += before
+		whole.Points = append(whole.Points, p)
+	}
+	return whole
+}
 
 // lineFrom follows a line; one along the axis that gets nowhere, as where the field
 // vanishes on it, gives way to one beside it.
 func (f *Field) lineFrom(from Peak, within bool) (Line, error) {
-	line, err := f.followed(from, within)
+	line, err := f.followed(from, within, false)
 	if err == nil && line.Ends != "" {
 		return line, nil
 	}
 	if aside, possible := f.besideAxis(from); possible {
-		if other, err := f.followed(aside, within); err == nil && other.Ends != "" {
+		if other, err := f.followed(aside, within, false); err == nil && other.Ends != "" {
 			return other, nil
 		}
 	}
 	return line, err
 }
 
-func (f *Field) followed(from Peak, within bool) (Line, error) {
+// followed is the line from a peak, into the region that it faces or back out of it.
+func (f *Field) followed(from Peak, within, back bool) (Line, error) {
 	if from.face.side < 0 && f.mirror == nil {
 		return Line{}, lack.Range("a field line is drawn from a peak on an electrode or a dielectric")
 	}
@@ -63,8 +94,11 @@ func (f *Field) followed(from Peak, within bool) (Line, error) {
 	if cmplx.Abs(g) == 0 {
 		return Line{}, lack.Failed("at %v there is no field to follow", from.At)
 	}
+	if within && start.grazes() {
+		start.beside += start.into * lastStep
+	}
 	t := &tracer{Field: f, region: start.region, along: 1, tolerance: 2e-5, within: within}
-	if real(g*cmplx.Conj(start.into)) < 0 {
+	if (real(g*cmplx.Conj(start.into)) < 0) != back {
 		t.along = -1
 	}
 	line := Line{}
@@ -141,7 +175,9 @@ func (t *tracer) follow(start complex128) (*wall, error) {
 		if w, at := t.crossed(x, x+d*complex(h+lastStep, 0)); w != nil {
 			ahead := apart(x, at)
 			if last := min(longest, lastStep); ahead <= last {
-				if x = t.arrive(at); !t.through(w, at) {
+				if inside, grazes := t.grazed(w, at, d); grazes {
+					x = t.arrive(inside)
+				} else if x = t.arrive(at); !t.through(w, at) {
 					return w, nil
 				}
 				h = firstStep
@@ -226,6 +262,24 @@ func (t *tracer) through(w *wall, at complex128) bool {
 	t.region = w.left + w.right - t.region
 	t.arrive(at)
 	return true
+}
+
+// grazing is the sine of the angle below which a line that is to stay in its body runs
+// along a surface of it and does not leave it: what is left of the angle is rounding.
+const grazing = 1e-2
+
+// grazed reports whether a line in a direction only grazes a surface of the body that it
+// is to stay in, and the place from which it goes on beside it.
+func (t *tracer) grazed(w *wall, at, d complex128) (inside complex128, grazes bool) {
+	if !t.within || w.kind != interfaces {
+		return at, false
+	}
+	_, path := w.curve.at(min(max(w.curve.project(at), 0), w.curve.length))
+	inward := path * 1i
+	if w.left != t.region {
+		inward = -inward
+	}
+	return at + inward*lastStep, math.Abs(real(d*cmplx.Conj(inward))) < grazing
 }
 
 // crossings are the points at which a curve crosses the straight way from a to b.

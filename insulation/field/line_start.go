@@ -2,6 +2,7 @@ package field
 
 import (
 	"math"
+	"math/cmplx"
 
 	"kilovet/hv/quantity"
 )
@@ -14,6 +15,11 @@ type foot struct {
 	g      complex128
 	into   complex128 // away from the surface
 	beside complex128 // from where it is followed
+}
+
+// grazes reports whether the field at a start runs along its surface.
+func (s foot) grazes() bool {
+	return math.Abs(real(s.g*cmplx.Conj(s.into))) < grazing*cmplx.Abs(s.g)
 }
 
 // footOf is the start of a line from a peak, on a panel or on an earthed mirror plane.

@@ -237,3 +237,30 @@ func TestLineThatGetsNowhereOnTheAxis(t *testing.T) {
 		t.Errorf("%v long, %v across", last.Along, last.Potential)
 	}
 }
+
+// A post that fills a stretch of a uniform field: the peak may lie anywhere on its side,
+// which the line runs along, or at its corners. It is the whole height in each case.
+func TestLineAlongTheSideOfAPost(t *testing.T) {
+	for _, h := range []float64{2, 3, 4, 6, 7, 10, 15} {
+		for _, permittivity := range []float64{2.1, 9.4} {
+			plate := func(name string, face, back float64) Electrode {
+				return Electrode{name, []profile.Profile{path(t, name, 0, face, 40, face, 40, back, 0, back)}}
+			}
+			f := under(t, Arrangement{
+				Electrodes:  []Electrode{plate("top", h, h+10), plate("bottom", 0, -10)},
+				Dielectrics: []Dielectric{{Name: "post", Permittivity: permittivity, Profile: path(t, "post", 0, 0, 15, 0, 15, h, 0, h, 0, 0)}},
+			}, alone2("top", "bottom"))
+			p, err := f.PeakIn("post")
+			if err != nil {
+				t.Fatal(err)
+			}
+			l, err := f.Within(p)
+			if err != nil {
+				t.Fatal(h, err)
+			}
+			last := l.Points[len(l.Points)-1]
+			within(t, "length", float64(last.Along), h*1e-3, 5e-2)
+			within(t, "potential across", math.Abs(float64(last.Potential-l.Points[0].Potential)), 1000, 1e-3)
+		}
+	}
+}

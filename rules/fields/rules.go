@@ -14,7 +14,7 @@ import (
 )
 
 // Rules lists the rules of this family.
-func Rules() []rule.Rule { return []rule.Rule{strength, breakdown, edge, junction, solids} }
+func Rules() []rule.Rule { return []rule.Rule{strength, breakdown, edge, junction, surface, solids} }
 
 // none is why a rule about fields is passed over.
 const none = "no field is described, and no feedthrough or gun by its dimensions"

@@ -52,7 +52,7 @@ func ClearanceNeeded(g gap.Gap, v gap.Voltages) (gap.Answer[quantity.Length], er
 	}
 	a := largest(append(asked, demand{Reading: floor, why: pollution}))
 	a.Assumptions = append(a.Assumptions, field.assumptions...)
-	a.Because += field.remark
+	a.Because += field.remark + unread(g, v.Peak)
 	a.Shown = append(a.Shown, compared(g, v)...)
 	return a, nil
 }
@@ -219,6 +219,17 @@ func secondaryDemand(g gap.Gap, peak quantity.Voltage) []demand {
 		d.Value, d.why = 2*d.Value, "reinforced, twice "+d.why // IEC 61010-1 K.3
 	}
 	return []demand{d}
+}
+
+// unread says where IEC 61010-1 asks for something and its table was not read.
+func unread(g gap.Gap, peak quantity.Voltage) string {
+	if g.Mains == nil || !g.Mains.Secondary {
+		return ""
+	}
+	if _, err := table.SecondaryClearance(peak, g.Mains.LineToNeutral, g.Mains.Category); err == nil {
+		return ""
+	}
+	return fmt.Sprintf("; what IEC 61010-1 asks for behind a mains of overvoltage category %d was not read and is not in it", g.Mains.Category)
 }
 
 // compared are what other standards ask for, shown and not judged.

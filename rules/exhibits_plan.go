@@ -97,6 +97,9 @@ func expectations(p *plan.Plan) exhibit.Table {
 	t := exhibit.Table{ID: "plan.readings", Title: "What every instrument should show",
 		Columns: []exhibit.Column{{Head: "step"}, {Head: "instrument"}, {Head: "expected"}, done}}
 	for _, s := range p.Steps {
+		if s.Polarity != "" {
+			t.Rows = append(t.Rows, texts(s.Name, "polarity of the output", s.Polarity, ""))
+		}
 		for _, r := range s.Readings {
 			t.Rows = append(t.Rows, texts(s.Name, r.Instrument, r.Text(), ""))
 		}

@@ -29,6 +29,8 @@ func SignOffOf(c *chain.Chain, r *Review, required []rule.Concern, read *reading
 	s := SignOff{signoff.Decide(c, r.Findings, required), r.Code(required), hazards(r), read}
 	switch {
 	case read == nil || read.Sound:
+	case read.Sign == readings.Reversed:
+		s.Against = append(s.Against, "the polarity that was read is the wrong one: kilovet readings says what that points to")
 	case len(read.Rows) == 0:
 		s.Against = append(s.Against, "the form of readings is empty: nothing was read")
 	default:

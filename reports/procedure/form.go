@@ -18,7 +18,8 @@ func Form(p *plan.Plan, h Heading) []byte {
 	var out bytes.Buffer
 	fmt.Fprintln(&out, `# Readings of a first power-up. Take away the # before a value and write what was
 # read, with its unit; leave what was not read as it is. The drive of a step is the
-# peak (zero to peak) that was really set.`)
+# peak (zero to peak) that was really set. Readings are magnitudes: the sign of the
+# output is the polarity, positive or negative.`)
 	fmt.Fprintln(&out, "format      = 1")
 	for _, key := range [...]struct{ key, value string }{{"document   ", h.Document}, {"revision   ", h.Revision}, {"description", h.SHA256}} {
 		if key.value != "" {
@@ -33,6 +34,9 @@ func Form(p *plan.Plan, h Heading) []byte {
 
 func formStep(out *bytes.Buffer, s *plan.Step) {
 	fmt.Fprintf(out, "\n[[step]]\nname  = %s\ndrive = %s\n", quoted(s.Name), quoted(quantity.Text(s.Peak)))
+	if s.Polarity != "" {
+		fmt.Fprintf(out, "# polarity = \"…\" # expected %s\n", s.Polarity)
+	}
 	for _, r := range s.Readings {
 		fmt.Fprintf(out, "[[step.reading]]\ninstrument = %s\n# value = %s # expected %s\n", quoted(r.Instrument), quoted("… "+quantity.DimensionOf(r.Unit).SI), r.Text())
 	}

@@ -56,7 +56,8 @@ func TestFormReadsBack(t *testing.T) {
 	for _, line := range strings.Split(form, "\n") {
 		if _, expected, found := strings.Cut(line, "# expected "); found {
 			value, _, _ := strings.Cut(expected, " (")
-			line = `value = "` + value + `" `
+			key, _, _ := strings.Cut(strings.TrimPrefix(line, "# "), " ")
+			line = key + ` = "` + value + `" `
 		}
 		filled = append(filled, line)
 	}
@@ -65,7 +66,7 @@ func TestFormReadsBack(t *testing.T) {
 		t.Fatal(faults)
 	}
 	c, err := readings.Of(e, p, f)
-	if err != nil || !c.Sound || len(c.Rows) != len(p.Steps) {
+	if err != nil || !c.Sound || c.Sign != readings.Proved || len(c.Rows) != len(p.Steps) {
 		t.Errorf("%+v, %v", c, err)
 	}
 }

@@ -18,9 +18,14 @@ func Readings(c *readings.Comparison, o Options) []byte {
 		w.Hang("", 0, o.Note)
 	}
 	w.Hang("", 0, "Readings: "+o.Title)
+	polarities(w, c.Polarities)
 	rows(w, c.Rows)
 	w.Line("")
 	switch {
+	case c.Sign == readings.Reversed:
+		reversed(w, c)
+	case len(c.Rows) == 0 && c.Sign == readings.Proved:
+		w.Hang("", 0, "Nothing but the polarity was read: nothing else is known.")
 	case len(c.Rows) == 0:
 		w.Hang("", 0, "Nothing was read: nothing is known.")
 	case c.Sound:
@@ -28,9 +33,35 @@ func Readings(c *readings.Comparison, o Options) []byte {
 	default:
 		suspects(w, c)
 	}
+	if c.Sign == readings.Untaken && len(c.Rows) > 0 {
+		w.Line("")
+		w.Hang("", 0, "The polarity was not taken. Readings are magnitudes: a chain whose whole ladder is reversed may show the same ones.")
+	}
 	w.Line("")
 	w.Hang("", 0, readingsDeference)
 	return w.Bytes()
+}
+
+func polarities(w *lines.Writer, all []readings.Polarity) {
+	for i, p := range all {
+		if i == 0 {
+			w.Line("")
+		}
+		word := "right   "
+		if !p.Within() {
+			word = "WRONG   "
+		}
+		w.Hang("  "+word, 10, fmt.Sprintf("polarity of the output: %s, expected %s (%s)", p.Read, p.Expected, p.Step))
+	}
+}
+
+// reversed says what a wrong polarity points to, and nothing else.
+func reversed(w *lines.Writer, c *readings.Comparison) {
+	w.Hang("", 0, "Switch off. The polarity is the wrong one; a reversed multiplier destroys what hangs on it. What the other readings point to was not looked for: prove the polarity first.")
+	w.Section("What it points to, the likeliest first", len(c.Suspects))
+	for i, s := range c.Suspects {
+		w.Hang(fmt.Sprintf("%d  ", i+1), 3, strings.Join(s.Names, "; or "))
+	}
 }
 
 func rows(w *lines.Writer, all []readings.Row) {

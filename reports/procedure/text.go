@@ -78,6 +78,9 @@ func step(w *lines.Writer, number int, s *plan.Step) {
 	if s.Return != nil {
 		w.Hang("    ", 4, "return of the multiplier: "+quantity.Text(*s.Return)+"; what is more than that is leakage or corona  "+box)
 	}
+	if s.Polarity != "" {
+		w.Hang("    ", 4, "polarity of the output to ground: "+s.Polarity+"  "+box)
+	}
 	for _, r := range s.Readings {
 		w.Hang("    ", 4, r.Instrument+": "+r.Text()+"  "+box)
 	}

@@ -10,6 +10,10 @@ import (
 	"kilovet/rules/evidence"
 )
 
+// LadderReversed is the name of the fault that every diode of the multiplier is the wrong
+// way round.
+const LadderReversed = "whole ladder reversed"
+
 // Kind is what happens to a part.
 type Kind string
 

@@ -81,7 +81,7 @@ func (l *lister) arc(name, class, node, add string) {
 
 // assembly lists what is put together wrongly.
 func (l *lister) assembly() {
-	l.add(Fault{Name: "whole ladder reversed", Class: "wrong polarity", Part: "multiplier", Kind: Reversed, Assembly: true, Add: addPolarity, edit: reversed})
+	l.add(Fault{Name: LadderReversed, Class: "wrong polarity", Part: "multiplier", Kind: Reversed, Assembly: true, Add: addPolarity, edit: reversed})
 	if l.chain.Multiplier.Symmetrical() {
 		for _, half := range []string{"drive.source.a", "drive.source.b"} {
 			l.add(Fault{Name: half + " lost", Class: "half of the drive lost", Part: half, Kind: Lost, edit: func(c *circuit.Circuit) *circuit.Circuit {

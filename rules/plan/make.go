@@ -23,6 +23,7 @@ func Of(e *evidence.Evidence) (*Plan, error) {
 		return nil, lack.Key("drive", "multiplier")
 	}
 	m := &maker{e: e, bench: Bench(e.Chain()), plan: &Plan{Takes: takes(e.Chain()), Stops: stops()}}
+	m.plan.Polarity = m.polarity()
 	m.cold()
 	m.before()
 	m.steps()

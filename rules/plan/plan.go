@@ -12,6 +12,9 @@ import (
 
 // Plan is a first power-up step by step.
 type Plan struct {
+	// Polarity is that of the output as described: positive or negative.
+	Polarity string
+
 	Cold   []Check
 	Before []string // to do before the first voltage
 	Steps  []Step
@@ -73,6 +76,7 @@ type Step struct {
 	Condition evidence.Condition
 	Peak      quantity.Voltage // of the drive, to set, zero to peak
 	Output    quantity.Voltage // mean at the output, signed
+	Polarity  string           // that the step proves: positive or negative; empty in the others
 	Ripple    *quantity.Voltage
 	Return    *quantity.Current // mean, in the multiplier's return: more is leakage or corona
 	Power     quantity.Power    // that the drive gives

@@ -44,6 +44,9 @@ func (m *maker) steps() {
 // step plans one level; what cannot be computed is left open, with the reason.
 func (m *maker) step(g Gun, state evidence.State, l level) {
 	s := Step{Name: nameOf(g, l), Gun: g, Share: l.share, Dwell: l.dwell, First: m.readying(g, l)}
+	if l.word != "" {
+		s.Polarity = m.plan.Polarity
+	}
 	top, err := m.e.In(state).Peak()
 	if err != nil {
 		m.open(s.Name, err)
@@ -92,11 +95,7 @@ func nameOf(g Gun, l level) string {
 func (m *maker) readying(g Gun, l level) []string {
 	switch {
 	case l.word != "":
-		sign := "positive"
-		if m.e.Chain().Multiplier.Negative() {
-			sign = "negative"
-		}
-		return []string{"Prove that the output is " + sign + " before going on; a reversed multiplier destroys what hangs on it."}
+		return []string{"Prove that the output is " + m.plan.Polarity + " before going on; a reversed multiplier destroys what hangs on it."}
 	case g == Still && quantity.Equal(l.share, again[0].share):
 		return m.gunReadying()
 	case g == Lit:
@@ -104,6 +103,14 @@ func (m *maker) readying(g Gun, l level) []string {
 			"An emitting gun makes X-rays: survey every shield before anybody stays near."}
 	}
 	return nil
+}
+
+// polarity is that of the output, as described.
+func (m *maker) polarity() string {
+	if m.e.Chain().Multiplier.Negative() {
+		return "negative"
+	}
+	return "positive"
 }
 
 // gunReadying is what comes before the gun is connected.

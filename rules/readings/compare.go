@@ -9,7 +9,11 @@ import (
 // Comparison is what the readings of a form say.
 type Comparison struct {
 	Rows []Row
-	// Sound reports that there are readings and every one lies within its bounds.
+	// Polarities are the signs of the output that were seen; Sign says what they come to.
+	Polarities []Polarity
+	Sign       Sign
+	// Sound reports that there are readings, that every one lies within its bounds, and that
+	// no polarity is the wrong one.
 	Sound bool
 	// Suspects are what deviating readings point to, what fits best first.
 	Suspects []Suspect
@@ -47,8 +51,11 @@ func Of(e *evidence.Evidence, p *plan.Plan, f *File) (*Comparison, error) {
 	if err != nil {
 		return nil, err
 	}
-	c := rowsOf(all)
-	if len(all) > 0 && !c.Sound {
+	c := compared(p, f, all)
+	switch {
+	case c.Sign == Reversed:
+		c.Suspects = reversals(e)
+	case len(all) > 0 && !c.Sound:
 		diagnose(e, all, c)
 	}
 	return c, nil
@@ -60,11 +67,13 @@ func Held(e *evidence.Evidence, p *plan.Plan, f *File) (*Comparison, error) {
 	if err != nil {
 		return nil, err
 	}
-	return rowsOf(all), nil
+	return compared(p, f, all), nil
 }
 
-func rowsOf(all []taken) *Comparison {
-	c := &Comparison{Sound: len(all) > 0}
+func compared(p *plan.Plan, f *File, all []taken) *Comparison {
+	c := &Comparison{}
+	c.Polarities, c.Sign = polarities(p, f)
+	c.Sound = len(all) > 0 && c.Sign != Reversed
 	for _, t := range all {
 		r := Row{t.step.Name, t.step.Readings[t.place].Instrument, t.read, t.expected, t.expected.Holds(t.read)}
 		c.Rows = append(c.Rows, r)

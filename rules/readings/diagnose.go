@@ -56,6 +56,9 @@ func diagnose(e *evidence.Evidence, all []taken, c *Comparison) {
 	c.Healthy = b.rms(healthy.misfit)
 	trials := b.tryAll(hypotheses(e))
 	c.Tried = len(trials)
+	if c.Sign == Proved {
+		trials = slices.DeleteFunc(trials, func(t trial) bool { return t.err == nil && b.turned(t.change) })
+	}
 	trials = append(trials, b.between(trials)...)
 	seen, faint := b.sorted(trials, healthy.misfit, c)
 	c.Suspects = b.grouped(seen)

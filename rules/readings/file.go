@@ -27,6 +27,7 @@ type Step struct {
 	document.Table
 	Name     document.Given[string]           `key:"name" needed:"yes" means:"name of the step in the plan" example:"gun disconnected, 25 %"`
 	Drive    document.Given[quantity.Voltage] `key:"drive" range:"> 0 V, <= 1 MV" needed:"yes" means:"peak of the drive that was really set, zero to peak" example:"446 V"`
+	Polarity document.Given[string]           `key:"polarity" words:"positive | negative" means:"sign of the output to ground that was seen; absent where none was" example:"negative"`
 	Readings []Reading                        `key:"reading" means:"what one instrument showed"`
 }
 
@@ -107,7 +108,7 @@ func (c *checker) reading(s *plan.Step, r *Reading, read map[string]bool) {
 	case errors.As(err, &refusal):
 		c.fault(r.Value.Place, fmt.Sprintf("%q: %s", r.Value.V, refusal.What), refusal.Remedy)
 	case v < 0:
-		c.fault(r.Value.Place, fmt.Sprintf("%q is below zero", r.Value.V), "readings are magnitudes: write it without its sign; a sign other than that of the chain is a reason to stop, not a reading")
+		c.fault(r.Value.Place, fmt.Sprintf("%q is below zero", r.Value.V), "readings are magnitudes: write it without its sign, and the sign of the output as the polarity of its step")
 	case v > impossible*expected.Value && v > impossible*expected.High:
 		c.fault(r.Value.Place, fmt.Sprintf("%q where %s is expected", r.Value.V, d.Text(expected.Value)), "look at the unit and at the range of the instrument")
 	}

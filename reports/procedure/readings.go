@@ -98,30 +98,52 @@ func suspects(w *lines.Writer, c *readings.Comparison) {
 	}
 	w.Section("What they point to, the best first", len(c.Suspects))
 	for i, s := range c.Suspects {
-		text := strings.Join(shortened(s.Names), "; or ")
+		text := strings.Join(shortened(s.Names, 8), "; or ")
 		text += fmt.Sprintf(" (%s standard errors", quantity.Significant(s.Fit))
 		if !s.Fits() {
 			text += ": explains only part of it"
 		}
 		w.Hang(fmt.Sprintf("%d  ", i+1), 3, text+")")
 	}
-	w.Section("What would tell them apart", len(c.Apart))
-	for _, a := range c.Apart {
-		var volts []string
-		for i, v := range a.Expected {
-			volts = append(volts, fmt.Sprintf("%s if it is %d", quantity.Text(quantity.Voltage(v)), i+1))
-		}
-		w.Hang("", 0, fmt.Sprintf("the voltage of %s to ground, in the step %q: %s", a.Node, a.Step, strings.Join(volts, ", ")))
-	}
+	apart(w, c)
 	w.Section("What could not be computed", len(c.Open))
 	for _, o := range c.Open {
 		w.Hang("- ", 2, o)
 	}
 }
 
+// apart says which further readings would separate what is left standing.
+func apart(w *lines.Writer, c *readings.Comparison) {
+	if c.Standing < 2 {
+		return
+	}
+	w.Section("What would tell them apart", 1)
+	if len(c.Apart) == 0 {
+		w.Hang("", 0, fmt.Sprintf("The readings leave %d things standing. Neither what the plan reads nor the voltage of any node to ground or the return current would tell them apart: look at each with everything off and earthed.", c.Standing))
+	}
+	for _, a := range c.Apart {
+		text := "a further instrument, which the plan does not have: " + a.What
+		if a.Planned {
+			text = a.What + ", which was not read"
+		}
+		var values []string
+		for _, e := range a.Expected {
+			values = append(values, rangeOf(e, a.Unit)+" if it is "+strings.Join(shortened(e.Names, 4), "; or "))
+		}
+		w.Hang("- ", 2, fmt.Sprintf("%s, in the step %q: %s", text, a.Step, strings.Join(values, "; ")))
+	}
+}
+
+func rangeOf(e readings.Expectation, unit string) string {
+	d := quantity.DimensionOf(unit)
+	if low, high := d.Text(e.Low), d.Text(e.High); low != high {
+		return low + " to " + high
+	}
+	return d.Text(e.High)
+}
+
 // shortened keeps a list of what looks alike readable.
-func shortened(names []string) []string {
-	const most = 8
+func shortened(names []string, most int) []string {
 	if len(names) <= most {
 		return names
 	}

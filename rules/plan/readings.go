@@ -131,6 +131,25 @@ func (d dial) band(e *evidence.Evidence, at evidence.Condition) (Band, error) {
 	return b, err
 }
 
+// Value is what the instrument at one place of Readings shows, in SI units and without
+// bounds.
+func Value(e *evidence.Evidence, place int) (float64, error) {
+	return dials(e.Chain())[place].read(e)
+}
+
+// Metered are the nodes whose voltage to ground an instrument of the plan shows.
+func Metered(c *chain.Chain) (nodes []string) {
+	if c.Divider != nil && c.Divider.Meter != nil {
+		nodes = append(nodes, "divider.tap")
+	}
+	for i := range c.Instruments {
+		if in := &c.Instruments[i]; !in.ReadsCurrent() && !Floats(in) {
+			nodes = append(nodes, in.At.V)
+		}
+	}
+	return nodes
+}
+
 // Values is what every instrument shows under a condition, in the order of Readings
 // and in SI units, without bounds.
 func Values(e *evidence.Evidence, at evidence.Condition) ([]float64, error) {

@@ -17,8 +17,10 @@ type Comparison struct {
 	Sound bool
 	// Suspects are what deviating readings point to, what fits best first.
 	Suspects []Suspect
-	// Apart are further readings that would tell the suspects apart.
-	Apart []Apart
+	// Standing is how many hypotheses the readings leave standing; Apart are further readings
+	// that would tell them apart.
+	Standing int
+	Apart    []Apart
 	// Healthy is how far the readings lie from a healthy chain, in standard errors (rms).
 	Healthy float64
 	// Tried counts the hypotheses; Unseen those that these readings cannot tell from a

@@ -19,7 +19,7 @@ type Suspect struct {
 	// is the truth.
 	Fit float64
 
-	trial *trial
+	trials []*trial // in the order of their names
 }
 
 // trial is a hypothesis with what it predicts.
@@ -29,6 +29,9 @@ type trial struct {
 	misfit    float64
 	err       error
 	within    bool // lies between two that were computed
+	// share is how far one within lies from its change towards another.
+	share   float64
+	towards evidence.Fault
 }
 
 func (t *trial) counts() int {
@@ -63,7 +66,7 @@ func diagnose(e *evidence.Evidence, all []taken, c *Comparison) {
 	seen, faint := b.sorted(trials, healthy.misfit, c)
 	c.Suspects = b.grouped(seen)
 	b.join(c.Suspects, faint)
-	c.Apart = b.apart(c.Suspects)
+	c.Apart, c.Standing = b.apart(c.Suspects)
 }
 
 // sorted are the hypotheses that explain the readings clearly better than a healthy chain,
@@ -96,13 +99,13 @@ func (b *bench) grouped(sorted []*trial) []Suspect {
 next:
 	for _, t := range sorted {
 		for i := range all {
-			if b.misfit(t.predicted, all[i].trial.predicted) < alike {
-				all[i].Names = append(all[i].Names, t.name)
+			if b.misfit(t.predicted, all[i].trials[0].predicted) < alike {
+				all[i].add(t)
 				continue next
 			}
 		}
 		if len(all) < most {
-			all = append(all, Suspect{[]string{t.name}, b.rms(t.misfit), t})
+			all = append(all, Suspect{[]string{t.name}, b.rms(t.misfit), []*trial{t}})
 		}
 	}
 	return all
@@ -113,12 +116,16 @@ next:
 func (b *bench) join(suspects []Suspect, faint []*trial) {
 	for _, t := range faint {
 		for i := range suspects {
-			if b.misfit(t.predicted, suspects[i].trial.predicted) < alike {
-				suspects[i].Names = append(suspects[i].Names, t.name)
+			if b.misfit(t.predicted, suspects[i].trials[0].predicted) < alike {
+				suspects[i].add(t)
 				break
 			}
 		}
 	}
+}
+
+func (s *Suspect) add(t *trial) {
+	s.Names, s.trials = append(s.Names, t.name), append(s.trials, t)
 }
 
 // Fits reports whether a suspect explains the readings.
@@ -141,16 +148,16 @@ func (b *bench) between(trials []trial) []trial {
 		if one.off == nil || one.err != nil {
 			continue
 		}
-		other, size := b.healthy, one.off.beyond+" "+one.off.size
+		other, size, towards := b.healthy, one.off.beyond+" "+one.off.size, evidence.Fault{}
 		if i+1 < len(trials) && trials[i+1].off != nil && trials[i+1].off.scale == one.off.scale {
 			next := &trials[i+1]
-			other, size = next.predicted, one.off.size+" to "+next.off.size
+			other, size, towards = next.predicted, one.off.size+" to "+next.off.size, next.change
 			if next.err != nil {
 				continue
 			}
 		}
 		if t, better := b.along(one, other); better {
-			t.name = one.off.text(size)
+			t.name, t.towards = one.off.text(size), towards
 			all = append(all, t)
 		}
 	}
@@ -165,7 +172,7 @@ func (b *bench) along(one *trial, other []float64) (trial, bool) {
 	for k := 1; k < parts; k++ {
 		p := blend(one.predicted, other, float64(k)/parts)
 		if m := b.misfit(b.read, p); m < best.misfit {
-			best.predicted, best.misfit = p, m
+			best.predicted, best.misfit, best.share = p, m, float64(k)/parts
 		}
 	}
 	return best, best.predicted != nil

@@ -33,6 +33,8 @@ func SignOffOf(c *chain.Chain, r *Review, required []rule.Concern, read *reading
 		s.Against = append(s.Against, "the polarity that was read is the wrong one: kilovet readings says what that points to")
 	case len(read.Rows) == 0:
 		s.Against = append(s.Against, "the form of readings is empty: nothing was read")
+	case read.Bent:
+		s.Against = append(s.Against, "every reading lies within its bounds, and yet they do not agree with each other: kilovet readings says what that points to")
 	default:
 		s.Against = append(s.Against, fmt.Sprintf("%d of %d readings lie outside their bounds: kilovet readings says which, and what that points to", astray(read), len(read.Rows)))
 	}

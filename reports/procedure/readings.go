@@ -90,7 +90,11 @@ func surplus(r readings.Row) string {
 }
 
 func suspects(w *lines.Writer, c *readings.Comparison) {
-	w.Hang("", 0, fmt.Sprintf("Switch off. Readings lie outside their bounds; from a healthy chain they are %s standard errors away (rms). Of %d things that may be wrong, %d would not show in these readings.",
+	what := "Readings lie outside their bounds"
+	if c.Bent {
+		what = "Every reading lies within its bounds, and yet they do not agree with each other"
+	}
+	w.Hang("", 0, fmt.Sprintf("Switch off. "+what+"; from a healthy chain they are %s standard errors away (rms). Of %d things that may be wrong, %d would not show in these readings.",
 		quantity.Significant(c.Healthy), c.Tried, c.Unseen))
 	if len(c.Suspects) == 0 {
 		w.Line("")

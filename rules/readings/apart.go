@@ -43,12 +43,7 @@ type unread struct {
 // standing, in the step with the highest drive that was read: nobody goes higher for it.
 func (b *bench) apart(suspects []Suspect) (all []Apart, standing int) {
 	rivals := left(suspects)
-	highest := b.all[0]
-	for _, t := range b.all {
-		if t.at.Peak > highest.at.Peak {
-			highest = t
-		}
-	}
+	highest := b.highest()
 	open := b.open(highest)
 	together := [][]*trial{rivals}
 	for len(all) < further {

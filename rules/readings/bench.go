@@ -24,7 +24,7 @@ const (
 	readShare  = 0.005 // how well a steady reading is taken
 	driveShare = 0.01  // how well the drive is known
 	resolution = 1e-3  // of the largest reading of the instrument
-	least      = 1e-9  // in SI units: an instrument that shows nothing is not read better
+	faintest   = 1e-9  // in SI units: an instrument that shows nothing is not read better
 	effect     = 0.05  // of what a fault changes: it varies with the tolerances of the other parts
 )
 
@@ -49,7 +49,7 @@ func newBench(e *evidence.Evidence, all []taken) *bench {
 		name := t.step.Readings[t.place].Instrument
 		own := readShare*t.expected.Value + resolution*largest[name]
 		if t.expected.Value <= 0 { // its bounds say what it may show by itself
-			own = max(own, t.expected.High/2, least)
+			own = max(own, t.expected.High/2, faintest)
 		}
 		b.own = append(b.own, own)
 	}

@@ -1,6 +1,8 @@
 package readings
 
 import (
+	"slices"
+
 	"kilovet/hv/quantity"
 	"kilovet/rules/evidence"
 	"kilovet/rules/plan"
@@ -12,9 +14,12 @@ type Comparison struct {
 	// Polarities are the signs of the output that were seen; Sign says what they come to.
 	Polarities []Polarity
 	Sign       Sign
-	// Sound reports that there are readings, that every one lies within its bounds, and that
-	// no polarity is the wrong one.
+	// Sound reports that there are readings, that every one lies within its bounds, that they
+	// agree with each other, and that no polarity is the wrong one.
 	Sound bool
+	// Bent reports that every reading lies within its bounds, and that together they lie
+	// further from a healthy chain than one explains: they do not agree with each other.
+	Bent bool
 	// Suspects are what deviating readings point to, what fits best first.
 	Suspects []Suspect
 	// Standing is how many hypotheses the readings leave standing; Apart are further readings
@@ -53,7 +58,7 @@ func Of(e *evidence.Evidence, p *plan.Plan, f *File) (*Comparison, error) {
 	if err != nil {
 		return nil, err
 	}
-	c := compared(p, f, all)
+	c := compared(e, p, f, all)
 	switch {
 	case c.Sign == Reversed:
 		c.Suspects = reversals(e)
@@ -69,18 +74,27 @@ func Held(e *evidence.Evidence, p *plan.Plan, f *File) (*Comparison, error) {
 	if err != nil {
 		return nil, err
 	}
-	return compared(p, f, all), nil
+	return compared(e, p, f, all), nil
 }
 
-func compared(p *plan.Plan, f *File, all []taken) *Comparison {
+// agree is the rms deviation in standard errors up to which readings that lie within their
+// bounds agree with each other.
+const agree = 2
+
+func compared(e *evidence.Evidence, p *plan.Plan, f *File, all []taken) *Comparison {
 	c := &Comparison{}
 	c.Polarities, c.Sign = polarities(p, f)
-	c.Sound = len(all) > 0 && c.Sign != Reversed
 	for _, t := range all {
 		r := Row{t.step.Name, t.step.Readings[t.place].Instrument, t.read, t.expected, t.expected.Holds(t.read)}
 		c.Rows = append(c.Rows, r)
-		c.Sound = c.Sound && r.Within
 	}
+	if len(all) > 0 {
+		b := newBench(e, all)
+		c.Healthy = b.rms(b.misfit(b.read, b.healthy))
+	}
+	within := !slices.ContainsFunc(c.Rows, func(r Row) bool { return !r.Within })
+	c.Bent = len(all) > 0 && within && c.Healthy > agree
+	c.Sound = len(all) > 0 && within && !c.Bent && c.Sign != Reversed
 	return c
 }
 

@@ -56,8 +56,7 @@ const (
 func diagnose(e *evidence.Evidence, all []taken, c *Comparison) {
 	b := newBench(e, all)
 	healthy := trial{predicted: b.healthy, misfit: b.misfit(b.read, b.healthy)}
-	c.Healthy = b.rms(healthy.misfit)
-	trials := b.tryAll(hypotheses(e))
+	trials := append(b.tryAll(hypotheses(e)), b.seeps()...)
 	c.Tried = len(trials)
 	if c.Sign == Proved {
 		trials = slices.DeleteFunc(trials, func(t trial) bool { return t.err == nil && b.turned(t.change) })

@@ -1,7 +1,5 @@
 package network
 
-import "kilovet/hv/lack"
-
 // mostCreeping is the number of periods after which creeping is given up.
 const mostCreeping = 200
 
@@ -43,7 +41,7 @@ func (s *search) creep(g grade, small float64) error {
 			}
 		}
 	}
-	return lack.Failed("the periodic state was not reached in %d periods", s.pace.work.Periods)
+	return s.unreached()
 }
 
 // onward takes an implicit Euler step from the period walked last and walks the period

@@ -1,10 +1,6 @@
 package network
 
-import (
-	"math"
-
-	"kilovet/hv/lack"
-)
+import "math"
 
 // search corrects a state until a period brings it back. Newton's correction is
 // taken where it can be believed; where some diodes do not conduct yet it cannot,
@@ -22,6 +18,7 @@ type search struct {
 	leaps     int     // taken
 	amplified float64 // largest correction so far over the change over the period it answers
 	stray     bool    // Newton's method led astray: leap next
+	rousing
 }
 
 // Most corrections, and most periods walked, in each grade.
@@ -81,7 +78,7 @@ func (s *search) until(g grade, done func() bool) error {
 			return err
 		}
 	}
-	return lack.Failed("the periodic state was not reached in %d periods", s.pace.work.Periods-walked)
+	return s.unreached()
 }
 
 // budget is the number of steps after which a search is given up: ten times what
@@ -100,6 +97,9 @@ func (s *search) once(g grade, done func() bool) (finished bool, err error) {
 	if err := s.here(g); err != nil {
 		return false, err
 	}
+	if s.rouse() {
+		return false, nil
+	}
 	size := norm(s.r)
 	if s.still++; size < 0.7*s.last {
 		s.still = 0
@@ -112,7 +112,7 @@ func (s *search) once(g grade, done func() bool) (finished bool, err error) {
 	if s.stray || s.still > 2 || !s.correct() {
 		s.stray, s.still, s.last, s.pace.smooth, s.trial = false, 0, math.Inf(1), false, false
 		if s.leaps++; s.leaps > s.patience {
-			return false, lack.Failed("the periodic state was not reached in %d periods", s.pace.work.Periods)
+			return false, s.unreached()
 		}
 		return false, s.advance(math.Inf(1))
 	}
@@ -130,6 +130,7 @@ func (s *search) once(g grade, done func() bool) (finished bool, err error) {
 	}
 	s.mark(&s.sound)
 	s.last = size
+	s.watch(g)
 	s.follows(f)
 	if math.Abs(f-1) > strange {
 		s.last, s.trial = math.Inf(1), false

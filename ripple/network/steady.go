@@ -63,11 +63,19 @@ type attempt struct {
 	press float64
 	leaps int  // that Newton's method may take where it goes astray
 	creep bool // creep instead
+	anew  int  // guesses made anew, each pressed twice as hard, for diodes that sleep
 }
 
 // attempts are the ways to begin a search, in the order in which they are tried.
 func attempts() []attempt {
-	return []attempt{{0.1, 1, false}, {0, 2, false}, {0, 0, true}, {0.05, 6, false}, {0.5, 10, false}, {5, 100, false}}
+	return []attempt{
+		{press: 0.1, leaps: 1, anew: 2},
+		{leaps: 2},
+		{creep: true},
+		{press: 0.05, leaps: 6, anew: 2},
+		{press: 0.5, leaps: 10},
+		{press: 5, leaps: 100},
+	}
 }
 
 // solve searches briskly, and with care where that does not get there.
@@ -92,8 +100,7 @@ func (s *search) search(from *Periodic) (*Periodic, error) {
 	}
 	var err error
 	for _, a := range attempts() {
-		s.prepare(a.press / float64(1+len(s.diodes)*len(s.diodes)))
-		s.aim()
+		s.press(a.press)
 		if err = s.begin(a); err == nil {
 			return s.refine()
 		}
@@ -120,7 +127,7 @@ func (s *search) begin(a attempt) error {
 	if a.creep {
 		return s.creep(rough, nearby)
 	}
-	s.patience = a.leaps
+	s.patience, s.rousing.anew, s.rousing.halve = a.leaps, a.anew, mostHalved
 	return s.approach(rough, nearby)
 }
 
@@ -161,13 +168,13 @@ func (s *search) settleFine(from *spot) error {
 	}
 	s.goBack(from)
 	if s.level != nil {
-		return lack.Failed("the drive that holds the voltage was not reached in %d periods", s.pace.work.Periods)
+		return s.unreached()
 	}
 	if err := s.creep(fine, 1e-7); err != nil {
 		return err
 	}
 	if !s.balanced(true) {
-		return lack.Failed("the periodic state was not reached in %d periods", s.pace.work.Periods)
+		return s.unreached()
 	}
 	return nil
 }
@@ -196,6 +203,12 @@ func Drive(c *circuit.Circuit) quantity.Frequency {
 
 // apart is the largest difference of a capacitor's voltage between two states.
 func (s *shooter) apart(x, y []float64) float64 {
+	_, v := s.widest(x, y)
+	return v
+}
+
+// widest is the capacitor whose voltage differs most between two states, and by how much.
+func (s *shooter) widest(x, y []float64) (name string, worst float64) {
 	u := [2][]float64{make([]float64, s.n), make([]float64, s.n)}
 	for i, z := range [][]float64{x, y} {
 		s.unpack(z, s.root, s.q, s.amps)
@@ -203,12 +216,13 @@ func (s *shooter) apart(x, y []float64) float64 {
 		s.pace.try(s.grain)
 		copy(u[i], s.pace.stage[2])
 	}
-	worst := 0.0
 	for i := range s.capacitors {
 		c := &s.capacitors[i]
-		worst = max(worst, abs(c.difference(u[0])-c.difference(u[1])))
+		if v := abs(c.difference(u[0]) - c.difference(u[1])); v > worst {
+			name, worst = s.c.Elements[c.element].Name, v
+		}
 	}
-	return worst
+	return name, worst
 }
 
 // plausible refuses a state that only the assumed leakage of the diodes keeps

@@ -18,8 +18,12 @@ func CreepageAtLeast(g gap.Gap, v gap.Voltages) (gap.Answer[quantity.Length], er
 	return atLeast(g, v, CreepageNeeded)
 }
 
-// lowest is the smallest share of the voltages that is tried.
-const lowest = 1e-3
+// Shares of the voltages that are tried: down to the lowest, by a ratio, since some laws
+// do not answer low voltages either.
+const (
+	lowest       = 1e-3
+	ratioOfTries = 1.3
+)
 
 // atLeast is a need that grows with the voltage, or what it is at the highest lower voltage
 // that its law answers.
@@ -35,8 +39,10 @@ func atLeast(g gap.Gap, v gap.Voltages, of func(gap.Gap, gap.Voltages) (gap.Answ
 		return a, err
 	}
 	answers := func(share float64) bool { _, err := at(share); return err == nil }
-	if !answers(lowest) {
-		return a, err
+	for share := 1.0; share > lowest; share /= ratioOfTries {
+		if lower := share / ratioOfTries; answers(lower) {
+			return at(edge(lower, share, answers))
+		}
 	}
-	return at(edge(lowest, 1, answers))
+	return a, err
 }

@@ -44,11 +44,11 @@ func TestFrequencyWhereItsTablesWereNotRead(t *testing.T) {
 	if l := lack.Of(err); l == nil || l.Kind != lack.Missing || l.Keys[0] != "spacing.shape" {
 		t.Errorf("no shape: %+v", l)
 	}
-	g.Shape = &gap.Shape{Kind: gap.SpherePlane, Radius: 1.9e-3} // under a fifth of 10 mm
+	g.Shape = &gap.Shape{Kind: gap.SpherePlane, Radius: 0.75e-3} // under a fifth of the 3.82 mm needed, whatever the gap is
 	if _, err = insulation.ClearanceNeeded(g, driven(100e3)); lack.Of(err) == nil || lack.Of(err).Kind != lack.Outside {
 		t.Errorf("too sharp: %v", err)
 	}
-	g.Shape.Radius = 2e-3
+	g.Shape.Radius = 0.77e-3
 	c, err := insulation.CreepageNeeded(g, driven(100e3))
 	if err != nil || len(c.Assumptions) == 0 {
 		t.Errorf("creepage at 100 kHz: %v (%v) with assumptions %v", c.Value, err, c.Assumptions)

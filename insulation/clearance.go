@@ -36,8 +36,23 @@ func ClearanceNeeded(g gap.Gap, v gap.Voltages) (gap.Answer[quantity.Length], er
 	if err != nil {
 		return none, err
 	}
-	field := fieldCase(g)
-	asked, err := electrical(g, v, field.Case)
+	inhomogeneous, err := needIn(table.CaseA, g, v, factor)
+	if !g.ImpulseTested || err == nil && g.Shape == nil && g.Clearance > 0 && quantity.AtLeast(g.Clearance, inhomogeneous.Value) {
+		return inhomogeneous, err // nothing need be taken for granted
+	}
+	if a, err := homogeneousNeed(g, v, factor); err == nil {
+		return a, nil
+	}
+	if err == nil && g.Shape != nil && g.Shape.Kind != gap.Plates {
+		inhomogeneous.Because += "; the shape is not homogeneous, case A in spite of the test"
+	}
+	return inhomogeneous, err
+}
+
+// needIn is what the tables ask for in a case of the field, times the factor of the altitude.
+func needIn(field table.Case, g gap.Gap, v gap.Voltages, factor table.Reading[quantity.Fraction]) (gap.Answer[quantity.Length], error) {
+	var none gap.Answer[quantity.Length]
+	asked, err := electrical(g, v, field)
 	if err != nil {
 		return none, err
 	}
@@ -51,8 +66,10 @@ func ClearanceNeeded(g gap.Gap, v gap.Voltages) (gap.Answer[quantity.Length], er
 		return none, err
 	}
 	a := largest(append(asked, demand{Reading: floor, why: pollution}))
-	a.Assumptions = append(a.Assumptions, field.assumptions...)
-	a.Because += field.remark + unread(g, v.Peak)
+	if err := bluntEnough(g, v, a.Value); err != nil {
+		return none, err
+	}
+	a.Because += unread(g, v.Peak)
 	a.Shown = append(a.Shown, compared(g, v)...)
 	return a, nil
 }
@@ -257,28 +274,6 @@ func altitudeFactor(g gap.Gap) (table.Reading[quantity.Fraction], error) {
 		return table.Reading[quantity.Fraction]{}, lack.Key("site.altitude")
 	}
 	return table.AltitudeFactor(*g.Altitude)
-}
-
-// judged is the case of the field with what it rests on.
-type judged struct {
-	table.Case
-	remark      string
-	assumptions []string
-}
-
-// fieldCase is case A, which asks for no test, unless the gap was impulse tested: then
-// case B, where the shape is nearly homogeneous (plates, or no radius under the gap) or
-// not described, the test being taken as its proof.
-func fieldCase(g gap.Gap) judged {
-	switch {
-	case !g.ImpulseTested:
-		return judged{Case: table.CaseA}
-	case g.Shape == nil:
-		return judged{table.CaseB, "; impulse tested", []string{"the impulse voltage test is taken as proof that the field is nearly homogeneous: no shape is given"}}
-	case g.Shape.Kind == gap.Plates || (g.Clearance > 0 && quantity.AtLeast(g.Shape.Sharpest(), g.Clearance)):
-		return judged{Case: table.CaseB, remark: "; homogeneous by its shape and impulse tested"}
-	}
-	return judged{Case: table.CaseA, remark: "; the shape is not homogeneous, case A in spite of the test"}
 }
 
 // dischargeFree is what Table F.9 asks of sharp electrodes where that is more than Table

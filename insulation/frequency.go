@@ -36,9 +36,6 @@ func frequencyFactor(g gap.Gap, v gap.Voltages, needed quantity.Length) (table.R
 	if v.Frequency > highestHighFrequency {
 		return none, lack.Range("IEC 60664-4 ends at 10 MHz, asked for %s", quantity.Text(v.Frequency))
 	}
-	if err := blunt(g, needed); err != nil {
-		return none, err
-	}
 	critical := quantity.Frequency(criticalProduct / float64(needed))
 	part := 0.0
 	switch {
@@ -55,16 +52,18 @@ func frequencyFactor(g gap.Gap, v gap.Voltages, needed quantity.Length) (table.R
 	}, nil
 }
 
-// blunt refuses electrodes sharper than a fifth of the clearance.
-func blunt(g gap.Gap, needed quantity.Length) error {
-	d := max(needed, g.Clearance)
+// bluntEnough refuses, where the frequency counts, electrodes sharper than a fifth of the
+// clearance that is needed; the one there is may be wider.
+func bluntEnough(g gap.Gap, v gap.Voltages, needed quantity.Length) error {
 	switch {
+	case !Fast(v):
+		return nil
 	case g.Shape == nil:
 		return lack.Because("above 30 kHz the clearance of sharp electrodes follows IEC 60664-4 Table 1, which was not read; a shape with rounded electrodes is needed", "spacing.shape")
-	case g.Shape.Kind == gap.Plates, quantity.AtLeast(g.Shape.Sharpest(), d/5):
+	case g.Shape.Kind == gap.Plates, quantity.AtLeast(g.Shape.Sharpest(), needed/5):
 		return nil
 	}
-	return lack.Range("above 30 kHz a radius of %s is too sharp for a clearance of %s: IEC 60664-4 Table 1 was not read", quantity.Text(g.Shape.Sharpest()), quantity.Text(d))
+	return lack.Range("above 30 kHz a radius of %s is too sharp for a clearance of %s, which is needed: IEC 60664-4 Table 1 was not read", quantity.Text(g.Shape.Sharpest()), quantity.Text(needed))
 }
 
 // slowCreepage says that Table 2 of IEC 60664-4 was not read.

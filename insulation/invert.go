@@ -9,7 +9,6 @@ import (
 	"kilovet/insulation/gas"
 	"kilovet/insulation/shape"
 	"kilovet/insulation/solve"
-	"kilovet/insulation/table"
 	"kilovet/insulation/vacuum"
 )
 
@@ -83,23 +82,6 @@ func RadiusForField(g gap.Gap, v quantity.Voltage, limit quantity.Field) (quanti
 		a, err := FieldPeak(g, gap.Voltages{Peak: v})
 		return 1 / float64(a.Value), err
 	})
-}
-
-// PeakByTable is the highest peak that the gap's clearance meets Table F.8 for, after
-// altitude and safety step. Past the last row it is that of the last row.
-func PeakByTable(g gap.Gap) (quantity.Voltage, error) {
-	if err := inAir(g); err != nil {
-		return 0, err
-	}
-	if g.Clearance <= 0 {
-		return 0, lack.Key("spacing.clearance")
-	}
-	factor, err := altitudeFactor(g)
-	if err != nil {
-		return 0, err
-	}
-	v, err := table.SteadyClearance(fieldCase(g).Case).Reach(g.Clearance / quantity.Length(factor.Value))
-	return v / safetyStep(g), err
 }
 
 // withGap is the gap with another clearance, its shape moved along.

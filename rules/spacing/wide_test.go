@@ -17,7 +17,7 @@ type anyGap struct {
 	medium, material, surface, shape, finish string
 	altitude, voltage, clearance, creepage   float64 // m, V, mm
 	radius, pressure                         float64 // mm, mbar
-	conditioned, symmetric                   bool
+	conditioned, symmetric, tested           bool
 	class, sharper                           string // sharper: in air, where one electrode is
 }
 
@@ -44,6 +44,9 @@ func (d anyGap) text() string {
 	}
 	if d.sharper != "" && (medium == "air" || d.medium == "gas: air") && !slices.Contains([]string{"plates", "sphere-sphere", "parallel cylinders"}, d.shape) {
 		b += fmt.Sprintf("sharper_electrode = %q\n", d.sharper)
+	}
+	if d.tested {
+		b += "impulse_tested = true\n"
 	}
 	switch medium {
 	case "gas":
@@ -77,6 +80,7 @@ func drawAny(t *rapid.T) anyGap {
 	d.class = rapid.SampledFrom([]string{"", "functional", "basic", "reinforced"}).Draw(t, "class")
 	d.sharper = rapid.SampledFrom([]string{"", "positive", "negative"}).Draw(t, "sharper")
 	d.symmetric = rapid.Bool().Draw(t, "symmetric")
+	d.tested = rapid.Bool().Draw(t, "tested")
 	d.creepage = d.clearance * decades(1, 10, "creepage over clearance")
 	return d
 }
@@ -115,11 +119,12 @@ func TestNothingBetterIsJudgedWorseAnywhere(t *testing.T) {
 			}
 			return d
 		},
+		"test":     func(d anyGap) anyGap { d.tested = true; return d },
 		"symmetry": func(d anyGap) anyGap { d.symmetric = true; return d },
 		"finish":   func(d anyGap) anyGap { d.finish = "polished"; return d },
 		"both":     func(d anyGap) anyGap { d.finish, d.conditioned = "polished", true; return d },
 	}
-	names := []string{"clearance", "creepage", "altitude", "radius", "surface", "material", "finish", "both", "voltage", "class", "polarity", "symmetry"}
+	names := []string{"clearance", "creepage", "altitude", "radius", "surface", "material", "finish", "both", "voltage", "class", "polarity", "symmetry", "test"}
 	rapid.Check(t, func(rt *rapid.T) {
 		d := drawAny(rt)
 		what := rapid.SampledFrom(names).Draw(rt, "better")

@@ -125,7 +125,7 @@ func dispositionTable(c *chain.Chain, findings []rule.Finding) []exhibit.Table {
 	}
 	d := signoff.Decide(c, findings, rule.Concerns)
 	row := func(a signoff.Disposition, subject, verdict string) {
-		record := strings.Trim(a.Record+": "+a.Measurement, ": ")
+		record := strings.Trim(a.Record+": "+a.Measured(), ": ")
 		t.Rows = append(t.Rows, []exhibit.Cell{exhibit.Words(strings.TrimSuffix(a.Rule+": "+subject, ": ")), exhibit.Words(verdict),
 			exhibit.Words(a.Word + " by " + a.Name), exhibit.Words(strings.TrimSuffix(a.Reason+"; "+record, "; "))})
 	}

@@ -2,6 +2,7 @@ package chain
 
 import (
 	"fmt"
+	"time"
 
 	"kilovet/hv/document"
 )
@@ -16,6 +17,8 @@ type Accepted struct {
 	Reason      document.Given[string] `key:"reason" needed:"yes" means:"why that is enough" example:"the hiss is heard and nobody works there"`
 	Record      document.Given[string] `key:"record" means:"number of the record of the measurement" example:"MR-0031"`
 	Measurement document.Given[string] `key:"measurement" means:"what was measured: value, where, when and with what" example:"0.2 uSv/h at 0.1 m from the port at 23 kV, survey meter SM-2, 2025-03-04"`
+	Instrument  document.Given[string] `key:"instrument" means:"with what it was measured, where the measurement does not say it" example:"survey meter SM-2"`
+	Date        document.Given[string] `key:"date" means:"day on which it was measured, where the measurement does not say it" example:"2025-03-04"`
 }
 
 // checkAccepted asks for the record of a measurement that is said to answer a point,
@@ -27,6 +30,9 @@ func checkAccepted(s *survey) {
 		if a.Disposition.V == "measured" {
 			s.recorded(a, a.Record, "record")
 			s.recorded(a, a.Measurement, "measurement")
+		}
+		if _, err := time.Parse(time.DateOnly, a.Date.V); s.sound(a.Date.Place) && err != nil {
+			s.fault(a.Date.Place, quoted(a.Date.V)+" is no date", "write year, month and day, as in 2025-03-04")
 		}
 		if !s.sound(a.Rule.Place) || a.Subject.Set() && !s.sound(a.Subject.Place) {
 			continue

@@ -2,11 +2,13 @@ package page
 
 import (
 	"cmp"
+	"fmt"
 	"strings"
 
 	"kilovet/reports/digest"
 	"kilovet/rules"
 	"kilovet/rules/local"
+	"kilovet/rules/readings"
 	"kilovet/rules/rule"
 	"kilovet/rules/signoff"
 )
@@ -81,11 +83,30 @@ func reviewed(r *rules.Review, s rules.SignOff) Section {
 		{"reviewed by", r.Program.Name + " " + r.Program.Version},
 	}
 	if s.Readings != nil {
-		facts = append(facts, Fact{"first power-up", count(len(s.Readings.Rows), "reading") + ", each within its bounds"})
+		facts = append(facts, Fact{"first power-up", powerUp(s.Readings)})
 	} else {
 		facts = append(facts, Fact{"first power-up", "no readings are given: this sheet comes before it"})
 	}
 	return Section{Title: "What was reviewed", Whole: true, Blocks: []Block{Facts{facts}, inputTable(r.Inputs)}}
+}
+
+// powerUp says how much of the plan was read: what was not is as unknown as before.
+func powerUp(c *readings.Comparison) string {
+	text := fmt.Sprintf("%d of %d readings of the plan were taken, each within its bounds", len(c.Rows), c.Planned)
+	if missing := c.Planned - len(c.Rows); missing > 0 {
+		text += fmt.Sprintf("; %d %s not taken, and nothing is known of what %s would have shown", missing, plural(missing, "was", "were"), plural(missing, "it", "they"))
+	}
+	if c.Sign == readings.Untaken {
+		return text + "; the polarity was not taken: a reversed ladder would read alike"
+	}
+	return text + "; the polarity is as described"
+}
+
+func plural(n int, one, several string) string {
+	if n == 1 {
+		return one
+	}
+	return several
 }
 
 func revision(index string) string {
@@ -124,7 +145,7 @@ func dispositionCell(p signoff.Point) Cell {
 	d := p.Disposition
 	switch {
 	case d != nil:
-		return lines(strong(d.Word), labelled("by", d.Name), plain(d.Reason), labelled("record", d.Record), labelled("measured:", d.Measurement))
+		return lines(strong(d.Word), labelled("by", d.Name), plain(d.Reason), labelled("record", d.Record), labelled("measured:", d.Measured()))
 	case p.Finding.Verdict == rule.Marginal:
 		return lines(plain("met with less than the stated margin, or on an assumption"))
 	}

@@ -11,6 +11,7 @@ import (
 	"kilovet/reports/page"
 	"kilovet/rules"
 	"kilovet/rules/local"
+	"kilovet/rules/readings"
 	"kilovet/rules/rule"
 	"kilovet/rules/signoff"
 )
@@ -74,5 +75,18 @@ func TestASheetWithoutLastDayHasABlankForIt(t *testing.T) {
 	text := outline(page.SignOff(sample.Sound(), rules.SignOff{}, page.Issue{Date: "2025-03-04"}))
 	if !strings.Contains(text, "____ (write in the last day)") || !strings.Contains(text, "None: every rule that applies is met.") {
 		t.Error(text)
+	}
+}
+
+// The sheet says how much of the plan was read, and what nobody knows of the rest.
+func TestTheSheetSaysWhatWasNotRead(t *testing.T) {
+	for want, read := range map[string]readings.Comparison{
+		"1 of 8 readings of the plan were taken, each within its bounds; 7 were not taken": {Rows: make([]readings.Row, 1), Planned: 8, Sound: true},
+		"the polarity was not taken": {Rows: make([]readings.Row, 1), Planned: 8, Sound: true},
+		"8 of 8 readings of the plan were taken, each within its bounds; the polarity is as described": {Rows: make([]readings.Row, 8), Planned: 8, Sound: true, Sign: readings.Proved},
+	} {
+		if text := outline(page.SignOff(sample.Sound(), rules.SignOff{Readings: &read}, page.Issue{Date: "2025-03-04"})); !strings.Contains(text, want) {
+			t.Errorf("%q is not on the sheet", want)
+		}
 	}
 }

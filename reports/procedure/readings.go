@@ -29,7 +29,7 @@ func Readings(c *readings.Comparison, o Options) []byte {
 	case len(c.Rows) == 0:
 		w.Hang("", 0, "Nothing was read: nothing is known.")
 	case c.Sound:
-		w.Hang("", 0, fmt.Sprintf("Every reading (%d) lies within its bounds; nothing points to a fault that these readings could show.", len(c.Rows)))
+		w.Hang("", 0, sound(c))
 	default:
 		suspects(w, c)
 	}
@@ -40,6 +40,14 @@ func Readings(c *readings.Comparison, o Options) []byte {
 	w.Line("")
 	w.Hang("", 0, readingsDeference)
 	return w.Bytes()
+}
+
+// sound says what readings within their bounds come to, and how much of the plan they are.
+func sound(c *readings.Comparison) string {
+	if len(c.Rows) == c.Planned {
+		return fmt.Sprintf("Every reading of the plan (%d) was taken and lies within its bounds; nothing points to a fault that these readings could show.", c.Planned)
+	}
+	return fmt.Sprintf("Every reading taken (%d of the %d of the plan) lies within its bounds; nothing points to a fault that these could show. Nothing is known of what was not read.", len(c.Rows), c.Planned)
 }
 
 func polarities(w *lines.Writer, all []readings.Polarity) {

@@ -59,7 +59,7 @@ func refused(w *writer, s rules.SignOff) {
 		w.hang("", gutter, p.Against)
 	}
 	w.blank()
-	w.wrap("An open point is mended, or described further, or given an [[accepted]] in the description: rule, subject, disposition (accepted, restricted, measured), name, reason, and record and measurement where it was measured.")
+	w.wrap("An open point is mended, or described further, or given an [[accepted]] in the description: rule, subject, disposition (accepted, restricted, measured), name, reason, and record and measurement where it was measured: value with its unit, instrument and day.")
 }
 
 func plural(n int, thing string) string {

@@ -10,7 +10,8 @@ import (
 
 // Comparison is what the readings of a form say.
 type Comparison struct {
-	Rows []Row
+	Rows    []Row
+	Planned int // readings of the whole plan, taken or not
 	// Polarities are the signs of the output that were seen; Sign says what they come to.
 	Polarities []Polarity
 	Sign       Sign
@@ -82,7 +83,7 @@ func Held(e *evidence.Evidence, p *plan.Plan, f *File) (*Comparison, error) {
 const agree = 2
 
 func compared(e *evidence.Evidence, p *plan.Plan, f *File, all []taken) *Comparison {
-	c := &Comparison{}
+	c := &Comparison{Planned: planned(p)}
 	c.Polarities, c.Sign = polarities(p, f)
 	for _, t := range all {
 		r := Row{t.step.Name, t.step.Readings[t.place].Instrument, t.read, t.expected, t.expected.Holds(t.read)}
@@ -96,6 +97,13 @@ func compared(e *evidence.Evidence, p *plan.Plan, f *File, all []taken) *Compari
 	c.Bent = len(all) > 0 && within && c.Healthy > agree
 	c.Sound = len(all) > 0 && within && !c.Bent && c.Sign != Reversed
 	return c
+}
+
+func planned(p *plan.Plan) (n int) {
+	for _, s := range p.Steps {
+		n += len(s.Readings)
+	}
+	return n
 }
 
 // gathered lists the readings that were taken, step by step.

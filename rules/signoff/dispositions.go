@@ -15,14 +15,27 @@ type Disposition struct {
 	Word                string // accepted, restricted, measured
 	Name, Reason        string
 	Record, Measurement string // of a measurement; may be empty
+	Instrument, Date    string // of it, where the measurement itself does not say them
 	Place               document.Place
+}
+
+// Measured is what was measured, with what and when.
+func (d Disposition) Measured() string {
+	text := d.Measurement
+	if d.Instrument != "" {
+		text += ", " + d.Instrument
+	}
+	if d.Date != "" {
+		text += ", " + d.Date
+	}
+	return text
 }
 
 // Dispositions are those of a description.
 func Dispositions(c *chain.Chain) []Disposition {
 	var all []Disposition
 	for _, a := range c.Accepted {
-		all = append(all, Disposition{a.Rule.V, a.Subject.V, a.Disposition.V, a.Name.V, a.Reason.V, a.Record.V, a.Measurement.V, a.Rule.Place})
+		all = append(all, Disposition{a.Rule.V, a.Subject.V, a.Disposition.V, a.Name.V, a.Reason.V, a.Record.V, a.Measurement.V, a.Instrument.V, a.Date.V, a.Rule.Place})
 	}
 	return all
 }

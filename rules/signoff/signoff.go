@@ -101,6 +101,8 @@ func against(p Point) string {
 		return fmt.Sprintf("it is unassessed and concerns life: %q is not enough, only a recorded measurement is", d.Word)
 	case d.Word == "measured" && (d.Record == "" || d.Measurement == ""):
 		return "the measurement is not recorded"
+	case d.Word == "measured":
+		return unrecorded(*d)
 	}
 	return ""
 }

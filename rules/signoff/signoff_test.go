@@ -28,7 +28,7 @@ func accepted(rule, subject, disposition, more string) string {
 	return text + "disposition = \"" + disposition + "\"\nname = \"A. N. Other\"\nreason = \"it holds\"\n" + more
 }
 
-const recorded = "record = \"MR-1\"\nmeasurement = \"0.2 uSv/h at 0.1 m\"\n"
+const recorded = "record = \"MR-1\"\nmeasurement = \"0.2 uSv/h at 0.1 m, survey meter SM-2, 2025-03-04\"\n"
 
 func decide(t *testing.T, text string, required []rule.Concern, findings ...rule.Finding) signoff.Decision {
 	t.Helper()

@@ -1,0 +1,47 @@
+package quantity
+
+import (
+	"regexp"
+	"strings"
+)
+
+// Mention is a value with its unit within a sentence. Dimension is nil for a unit that only
+// instruments show, as a dose rate in sieverts.
+type Mention struct {
+	Text      string
+	Dimension *Dimension
+	Unit      string
+}
+
+// mention is a number and what may be its unit: a sentence goes on after it.
+var mention = regexp.MustCompile(`(?:^|[^\pL\pN._-])([+-]?(?:\d+(?:\.\d*)?|\.\d+)(?:[eE][+-]?\d+)?) ?(%|[\pL°µμΩΩ][\pL\pN/²³]*)`)
+
+// shown are units that instruments show and no description is written in.
+var shown = []string{"Sv/h", "mSv/h", "uSv/h", "nSv/h", "Sv/s", "cps", "counts/s"}
+
+// Mentions are the values with a known unit that a sentence holds, in its order.
+func Mentions(sentence string) (all []Mention) {
+	for _, m := range mention.FindAllStringSubmatch(sentence, -1) {
+		symbol := plainSigns(m[2])
+		if d := knows(symbol); d != nil {
+			all = append(all, Mention{m[1] + " " + m[2], d, symbol})
+			continue
+		}
+		for _, u := range shown {
+			if u == symbol {
+				all = append(all, Mention{m[1] + " " + m[2], nil, symbol})
+			}
+		}
+	}
+	return all
+}
+
+// knows is the first dimension that knows a unit.
+func knows(symbol string) *Dimension {
+	for _, d := range dimensions {
+		if _, ok := d.find(symbol); ok && strings.Trim(symbol, "1") != "" {
+			return d
+		}
+	}
+	return nil
+}

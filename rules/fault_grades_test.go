@@ -27,6 +27,36 @@ rated_voltage = "22.5 kV"`, `over_voltage = { trip = "23 kV", senses = "second d
 	}
 }
 
+// A gap that a single fault brings above what it is expected to stand fails where nothing
+// catches it; one that has more than the tables allow, and stands it, is marginal and known as
+// one whose limit is passed.
+func TestAGapInAFault(t *testing.T) {
+	const gap = "to         = \"stage.2\"\nalso       = [\"stage.3\"]\nmedium     = \"air\"\ninsulation = \"functional\"\nclearance  = \"18 mm\""
+	r := wholeWith(t, gap, strings.Replace(gap, "18 mm", "6 mm", 1))
+	f := found(t, r, "fault.spacing", "stages 1 to 3")
+	if f.Verdict != rule.Fails || f.Concern != rule.Equipment || !strings.Contains(f.Because, "it flashes over") {
+		t.Errorf("6 mm: %+v", f)
+	}
+	r = wholeWith(t)
+	f = found(t, r, "fault.spacing", "stages 1 to 3")
+	if f.Verdict != rule.Marginal || !f.Passes() || !strings.Contains(f.Because, "the estimate of breakdown is not") {
+		t.Errorf("18 mm: %+v", f)
+	}
+	if f := found(t, r, "fault.rating", "chain"); !f.Passes() {
+		t.Errorf("ratings: %+v", f)
+	}
+}
+
+// found is one finding of a review.
+func found(t *testing.T, r *rules.Review, id, subject string) rule.Finding {
+	t.Helper()
+	i := slices.IndexFunc(r.Findings, func(f rule.Finding) bool { return f.Rule == id && f.Subject == subject })
+	if i < 0 {
+		t.Fatalf("no %s of %s", id, subject)
+	}
+	return r.Findings[i]
+}
+
 // The over-current trip senses what it is said to: a part that a fault leaves alone catches
 // nothing, the part that failed neither, and what is no part leaves it unassessed.
 func TestWhatTheOverCurrentTripSenses(t *testing.T) {

@@ -147,7 +147,7 @@ func dispositionCell(p signoff.Point) Cell {
 	case d != nil:
 		return lines(strong(d.Word), labelled("by", d.Name), plain(d.Reason), labelled("record", d.Record), labelled("measured:", d.Measured()))
 	case p.Finding.Verdict == rule.Marginal:
-		return lines(plain("met with less than the stated margin, or on an assumption"))
+		return lines(plain(digest.Marginal(p.Finding)))
 	}
 	if !p.Required {
 		return lines(plain("not among the required concerns"))

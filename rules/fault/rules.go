@@ -184,9 +184,9 @@ func judgeClass(e *evidence.Evidence, c class) (rule.Finding, bool) {
 		f.Because += fmt.Sprintf("; the %s catches it: %s", m.Name, m.Because)
 		return f.There(true).Assume(m.Assumes...), true
 	}
-	f.Verdict = rule.Marginal
+	f.Verdict, f.Graded = rule.Marginal, true
 	if keepsOff(*worst) {
-		f.Verdict, f.Concern = rule.Fails, worst.Concern
+		f.Verdict, f.Concern, f.Graded = rule.Fails, worst.Concern, false
 	}
 	f.Because += fmt.Sprintf(", %d of them caught by nothing described (%s)", uncaught, whyNot(by.Measures))
 	f.Remedy = by.Add
@@ -229,6 +229,7 @@ func summary(e *evidence.Evidence, findings []rule.Finding) rule.Finding {
 	if met == len(findings) {
 		return f.There(true)
 	}
-	f.Verdict, f.Remedy = rule.Marginal, "read the table of faults, the worst first, and add what stands beside each"
+	f.Because += "; " + fmt.Sprintf("%d leave a part above its rating, which is marginal by decision: one broken part may cost another", len(findings)-met)
+	f.Verdict, f.Graded, f.Remedy = rule.Marginal, true, "read the table of faults, the worst first, and add what stands beside each"
 	return f
 }

@@ -3,99 +3,13 @@ package fault
 import (
 	"fmt"
 	"slices"
-	"strings"
 
-	"kilovet/hv/chain"
 	"kilovet/hv/circuit"
 	"kilovet/hv/lack"
 	"kilovet/rules/evidence"
 	"kilovet/rules/limits"
 	"kilovet/rules/rule"
 )
-
-var gapSource = rule.Source{Text: "decision of this review: a flashover to bonded metal or between parts is the arc of the library, which the bonds carry and whose stresses are judged there, and passing a tabulated clearance is no flashover; towards what a hand can reach nothing stands between", Mark: rule.Practice}
-
-var gaps = rule.Rule{
-	ID: "fault.spacing", Title: "Spacings in a single fault",
-	Demands: "What a single fault puts across a spacing neither breaks it down nor passes the clearance of the tables, unless an independent measure switches off.",
-	Applies: "Every spacing across which a fault puts more than any state does. Towards earthed metal and between parts it is marginal; it fails where the other side can be touched.",
-	Margin:  "marginal where it passes towards earthed metal or between parts, failing where a side can be touched or is the mains",
-	Concern: rule.Life,
-	Sources: []rule.Source{faultSource, gapSource},
-	Example: rule.Example{
-		Swaps:   []rule.Swap{{Was: "name       = \"stages 1 to 3\"\nfrom       = \"stage.1\"\nto         = \"stage.2\"\nalso       = [\"stage.3\"]\nmedium     = \"air\"\ninsulation = \"functional\"\nclearance  = \"18 mm\"", Becomes: "name       = \"stages 1 to 3\"\nfrom       = \"stage.1\"\nto         = \"stage.2\"\nalso       = [\"stage.3\"]\nmedium     = \"air\"\ninsulation = \"functional\"\nclearance  = \"70 mm\""}},
-		Changes: []rule.Change{{Rule: "fault.spacing", Subject: "stages 1 to 3", Verdict: rule.Meets}},
-	},
-	Judge: func(e *evidence.Evidence) rule.Judgement {
-		if !e.HasSupply() {
-			return rule.Over(noSupply)
-		}
-		return judgeGaps(e)
-	},
-}
-
-func judgeGaps(e *evidence.Evidence) rule.Judgement {
-	var found []rule.Finding
-	nothing := "no fault puts more across a described spacing than the states of the chain do"
-	all := e.Chain().Spacings
-	for i := range all {
-		f, raised := judgeGap(e, &all[i])
-		if raised {
-			found = append(found, f)
-			continue
-		}
-		if _, err := e.Spacing(&all[i]); err != nil {
-			nothing = "what a fault puts across a spacing is not known where its voltage is not, which the rules of that spacing say"
-		}
-	}
-	if len(all) == 0 {
-		return rule.Over("no spacing is described")
-	}
-	return withUnknown(found, rule.Finding{Rule: "fault.spacing", Concern: rule.Life, Sources: []rule.Source{faultSource}}, StudyAll(e), nothing)
-}
-
-// judgeGap is the worst that any fault does to one spacing.
-func judgeGap(e *evidence.Evidence, s *chain.Spacing) (rule.Finding, bool) {
-	worst, by, found := worstOf(StudyAll(e), func(f rule.Finding) bool {
-		return strings.HasPrefix(f.Rule, "spacing.") && f.Subject == s.Name.V
-	})
-	if !found {
-		return rule.Finding{}, false
-	}
-	f := worst
-	f.Rule, f.Under, f.Because = "fault.spacing", by.Name, by.Name+": "+worst.Because
-	if f.Verdict == rule.Unassessed {
-		return f, true
-	}
-	f.Verdict = rule.Meets
-	if Share(worst) <= 1 {
-		return f.WithoutRemedyIfMet(), true
-	}
-	if m, caught := by.Caught(); caught {
-		f.Relation, f.Needed, f.Provided, f.Margin = rule.Presence, nil, nil, nil
-		f.Because += fmt.Sprintf("; the %s catches it: %s", m.Name, m.Because)
-		return f.Assume(m.Assumes...).WithoutRemedyIfMet(), true
-	}
-	f.Verdict = rule.Marginal
-	if touches(e, s) {
-		f.Verdict = rule.Fails
-	}
-	f.Because += "; nothing described catches it"
-	if by.Add != "" {
-		f.Remedy = by.Add + "; or " + f.Remedy
-	}
-	return f, true
-}
-
-// touches reports whether one side of a spacing can be touched.
-func touches(e *evidence.Evidence, s *chain.Spacing) bool {
-	var all []string
-	if a := e.Chain().Access; a != nil {
-		all = a.Touchable.V
-	}
-	all = append(slices.Clone(all), "mains")
-	return slices.ContainsFunc(append([]string{s.From.V, s.To.V}, s.Also.V...), func(node string) bool { return slices.Contains(all, node) })
-}
 
 // worstOf finds the finding of a sort that uses most of what is allowed; one without an
 // answer counts as worse than any that is met.

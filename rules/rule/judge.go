@@ -107,6 +107,12 @@ func (f Finding) Assume(what ...string) Finding {
 	return f.tempered()
 }
 
+// Passes reports whether a marginal finding is one of a limit that is passed: it is not met
+// with less in hand, it is not met, and its rule says why it does not fail.
+func (f Finding) Passes() bool {
+	return f.Verdict == Marginal && (f.Graded || f.Margin != nil && !quantity.AtLeast(1+*f.Margin, 1))
+}
+
 // Worst is the worst verdict of some findings; none at all is unassessed.
 func Worst(findings []Finding) Verdict {
 	if len(findings) == 0 {

@@ -92,6 +92,8 @@ type Finding struct {
 	Needed, Provided *Amount  // nil for a rule of presence, or where unassessed
 	Margin           *float64 // nil likewise
 	Stated           float64  // the margin below which it is marginal
+	// Graded says that a limit is passed and that the rule calls it marginal all the same.
+	Graded bool
 	// Whole is what the limit is a share of, a rating or an estimate; nil where it is none.
 	Whole *Amount
 

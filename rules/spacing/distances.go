@@ -24,7 +24,7 @@ var clearance = rule.Rule{
 		{Text: "IEC 60664-1:2020 Table F.2 where mains or drive reach the gap", Mark: rule.Read},
 	},
 	Example: rule.Example{
-		Swaps:   []rule.Swap{{Was: "clearance  = \"12 mm\"\ncreepage   = \"30 mm\"", Becomes: "clearance  = \"1.2 mm\"\ncreepage   = \"30 mm\""}},
+		Swaps:   []rule.Swap{{Was: "clearance  = \"20 mm\"\ncreepage   = \"30 mm\"", Becomes: "clearance  = \"1.2 mm\"\ncreepage   = \"30 mm\""}},
 		Changes: []rule.Change{{Rule: "spacing.clearance", Subject: "drive lead to the enclosure", Verdict: rule.Fails}},
 	},
 	Judge: func(e *evidence.Evidence) rule.Judgement {

@@ -33,7 +33,7 @@ func nodeEnergy(e *evidence.Evidence) []exhibit.Table {
 		ID: "energy.nodes", Chapter: exhibit.Energy, Title: "What each node holds, and for how long", Basis: evidence.Basis,
 		Columns: []exhibit.Column{{Head: "node"}, {Head: "voltage", Unit: "V"}, {Head: "charge", Unit: "C"}, {Head: "energy", Unit: "J"},
 			{Head: "current through 2 kΩ", Unit: "A"}, {Head: "to 60 V", Unit: "s"}, {Head: "to 60 V, drive unplugged", Unit: "s"}},
-		Note: under(e) + "Charge and energy are what an ideal short delivers, drive and loads off; the times count what is permanent alone. A meter at the divider shows the sensed node only.",
+		Note: under(e) + "Charge and energy are what an ideal short delivers, drive and loads off; the times count what is permanent alone. A meter at the divider shows the sensed node only. The mains is that of its live conductor, peak: only its plug ends it.",
 	}
 	for _, node := range e.Nodes() {
 		r, err := e.Reachable(node)
@@ -41,6 +41,11 @@ func nodeEnergy(e *evidence.Evidence) []exhibit.Table {
 			continue
 		}
 		i, errI := e.Available(node)
+		if e.OnMains(node) {
+			t.Rows = append(t.Rows, []exhibit.Cell{exhibit.Words(node), exhibit.Number(r.Voltage), exhibit.Words("without end"), exhibit.Words("without end"),
+				exhibit.OrWords(i, errI), exhibit.Words("never by itself"), exhibit.Words("stays live")})
+			continue
+		}
 		d, errD := e.DischargeOf(node)
 		u, errU := e.Unplugged(node)
 		t.Rows = append(t.Rows, []exhibit.Cell{exhibit.Words(node), exhibit.Number(r.Voltage), exhibit.Number(r.Short.Charge), exhibit.Number(r.Short.Energy),
@@ -161,9 +166,9 @@ func rodTable(e *evidence.Evidence) []exhibit.Table {
 	t := exhibit.Table{
 		ID: "energy.rod", Chapter: exhibit.Energy, Title: "The earthing rod at each node", Basis: "decay of the whole network with the rod on one node",
 		Columns: []exhibit.Column{{Head: "node"}, {Head: "voltage", Unit: "V"}, {Head: "peak current", Unit: "A"}, {Head: "node to 60 V", Unit: "s"}, {Head: "all to 60 V", Unit: "s"}, {Head: "energy", Unit: "J"}},
-		Note:    under(e) + "All to 60 V is the time after which no node comes back when the rod is lifted, absorption apart. Touch every node in turn, from the earthy end to the hot end, then clip each; leave the earth on.",
+		Note:    under(e) + "All to 60 V is the time after which no node comes back when the rod is lifted, absorption apart. Touch every node in turn, from the earthy end to the hot end, then clip each; leave the earth on. Never the mains: it is unplugged.",
 	}
-	for _, node := range e.Nodes() {
+	for _, node := range e.Discharged() { // a rod ends no mains
 		r, err := e.Reachable(node)
 		x, err2 := e.Rod(node)
 		if first(err, err2) == nil {

@@ -40,7 +40,7 @@ func openedAtNodes(e *evidence.Evidence) []exhibit.Table {
 	if err != nil {
 		return nil
 	}
-	for _, node := range e.Nodes() {
+	for _, node := range e.Discharged() {
 		intact, err := e.DischargeOf(node)
 		if _, held := e.Reachable(node); err != nil || held != nil {
 			continue
@@ -84,7 +84,7 @@ func openedEach(e *evidence.Evidence) []exhibit.Table {
 		return nil
 	}
 	var tables []exhibit.Table
-	nodes := e.Nodes()
+	nodes := e.Discharged()
 	for i := 0; i < len(nodes); i += abreast {
 		some := nodes[i:min(i+abreast, len(nodes))]
 		of := some[0] + " to " + some[len(some)-1]
@@ -159,7 +159,7 @@ func comebackAtNodes(e *evidence.Evidence) []exhibit.Table {
 		Columns: []exhibit.Column{{Head: "node"}, {Head: "was at", Unit: "V"}, {Head: "back, at most", Unit: "V"}, {Head: "charge", Unit: "C"}, {Head: "energy", Unit: "J"}, {Head: "the meter then shows"}},
 		Note:    under(e) + "At most: where nothing leads it away. A cable gets some back too; nothing is published of it here. What comes back behind a diode or an open part is not seen by any meter at the divider.",
 	}
-	for _, node := range e.Nodes() {
+	for _, node := range e.Discharged() {
 		r, err := e.Reachable(node)
 		back, err2 := e.ComesBackAt(node)
 		if first(err, err2) != nil || back.Voltage == 0 {

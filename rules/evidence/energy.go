@@ -152,8 +152,8 @@ func (e *Evidence) TouchCurrent(node string) (quantity.Current, error) {
 		if err != nil {
 			return 0, err
 		}
-		if node == mainsNode {
-			v, err := e.mainsPeak()
+		if e.onMains(node) {
+			v, err := e.Touched(node)
 			return quantity.Current(float64(v) / float64(measuring)), err
 		}
 		const body = "measuring resistor"

@@ -2,6 +2,7 @@ package evidence
 
 import (
 	"math"
+	"slices"
 
 	"kilovet/hv/chain"
 	"kilovet/hv/lack"
@@ -23,6 +24,12 @@ func (e *Evidence) peakOver(a, b string) (quantity.Voltage, error) {
 	}
 	line, err := e.lineVoltage()
 	return peak + max(0, line*math.Sqrt2-stated), err
+}
+
+// Touched is the largest voltage to ground that whoever reaches a node can touch there: on
+// the mains that of its live conductor.
+func (e *Evidence) Touched(node string) (quantity.Voltage, error) {
+	return e.peakOver(node, "ground")
 }
 
 // lastingOver is the r.m.s. voltage between two nodes that a spacing between them is
@@ -47,6 +54,14 @@ func (e *Evidence) lineVoltage() (quantity.Voltage, error) {
 		return 0, lack.Key("site.mains")
 	}
 	return e.chain.Site.Mains.V, nil
+}
+
+// OnMains reports whether a node is that of the mains, which no charge, energy or time ends.
+func (e *Evidence) OnMains(name string) bool { return e.onMains(name) }
+
+// Discharged are the nodes that discharge: all but the mains.
+func (e *Evidence) Discharged() []string {
+	return slices.DeleteFunc(slices.Clone(e.Nodes()), e.onMains)
 }
 
 // onMains reports whether a node is that of the mains.

@@ -20,7 +20,7 @@ type Reachable struct {
 
 // Reachable is what a node holds under the condition.
 func (e *Evidence) Reachable(node string) (Reachable, error) {
-	v, err := e.Between(node, "ground")
+	v, err := e.Touched(node)
 	if err != nil {
 		return Reachable{}, err
 	}

@@ -58,7 +58,7 @@ func touchSources() []rule.Source {
 
 func touchable(e *evidence.Evidence, node string, f rule.Finding) rule.Finding {
 	most, err := evidence.Worst(e, []string{node},
-		func(e *evidence.Evidence, n string) (quantity.Voltage, error) { return e.Between(n, "ground") })
+		func(e *evidence.Evidence, n string) (quantity.Voltage, error) { return e.Touched(n) })
 	if err != nil {
 		return f.Lacking(err)
 	}
@@ -87,7 +87,7 @@ func touchLimit(e *evidence.Evidence, node string) (quantity.Voltage, error) {
 		return 0, err
 	}
 	allowed := allowedIn(e)
-	if node == "mains" || !quantity.AtMost(swing/2, peak*limits.TouchRipple) {
+	if e.OnMains(node) || !quantity.AtMost(swing/2, peak*limits.TouchRipple) {
 		return allowed.peak, nil
 	}
 	return allowed.voltage, nil
@@ -111,6 +111,9 @@ func allowedIn(e *evidence.Evidence) allowed {
 // limited judges a node above the touch voltage by its charge or energy; without a
 // computed current it cannot pass.
 func limited(e *evidence.Evidence, node string, v quantity.Voltage, f rule.Finding) rule.Finding {
+	if e.OnMains(node) {
+		return carried(e, node, f)
+	}
 	short, err := e.ShortAt(node)
 	if err != nil {
 		return f.Lacking(err)
@@ -121,6 +124,12 @@ func limited(e *evidence.Evidence, node string, v quantity.Voltage, f rule.Findi
 	if !quantity.AtMost(provided.Value, needed.Value) {
 		return f.Most(provided, needed, 0)
 	}
+	return carried(e, node, f)
+}
+
+// carried judges a node by the current that its supply drives through a person, for as long
+// as it is on.
+func carried(e *evidence.Evidence, node string, f rule.Finding) rule.Finding {
 	current, err := e.TouchCurrent(node)
 	if err != nil {
 		return f.Lacking(err)

@@ -63,7 +63,11 @@ func (e *Evidence) Measured() (*Measured, error) {
 func (e *Evidence) DisturbanceAssumptions() []string {
 	m, err := e.Measured()
 	if m == nil || err != nil {
-		return e.RippleAssumptions()
+		all := e.RippleAssumptions()
+		if e.Unheated() {
+			all = append(all, "no hum comes with the heater, of which nothing is described")
+		}
+		return all
 	}
 	var all []string
 	if lasts := m.Record.Duration(); !quantity.AtLeast(float64(lasts), float64(e.averaging())) {

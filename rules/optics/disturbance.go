@@ -4,6 +4,7 @@ import (
 	"fmt"
 
 	"kilovet/hv/document"
+	"kilovet/hv/lack"
 	"kilovet/hv/quantity"
 	"kilovet/rules/evidence"
 	"kilovet/rules/limits"
@@ -87,6 +88,9 @@ field_width          = "1 mm"`}},
 		s, err := e.BandingWithin()
 		if err != nil {
 			return rule.One(f.Lacking(err))
+		}
+		if m, _ := e.Measured(); len(s.Lines) == 0 && m == nil && e.Unheated() {
+			return rule.One(f.Lacking(lack.Key("heater")))
 		}
 		if len(s.Lines) == 0 {
 			return rule.Over("nothing is slower than the dwell of " + quantity.Text(b.Dwell.V))

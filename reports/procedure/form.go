@@ -3,6 +3,7 @@ package procedure
 import (
 	"bytes"
 	"fmt"
+	"slices"
 	"strings"
 
 	"kilovet/hv/quantity"
@@ -25,6 +26,9 @@ func Form(p *plan.Plan, h Heading) []byte {
 		if key.value != "" {
 			fmt.Fprintf(&out, "%s = %s\n", key.key, quoted(key.value))
 		}
+	}
+	if slices.ContainsFunc(p.Steps, func(s plan.Step) bool { return s.Within.Unit != "" }) {
+		fmt.Fprintln(&out, "# The return current is not among the readings: no [[instrument]] that reads it is\n# described, so its error is not known. Describe one (reads = \"return current\").")
 	}
 	for i := range p.Steps {
 		formStep(&out, &p.Steps[i])

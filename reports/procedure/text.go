@@ -75,8 +75,8 @@ func step(w *lines.Writer, number int, s *plan.Step) {
 	}
 	w.Hang("    ", 4, fmt.Sprintf("set the drive to %s, hold for %s; output %s%s, drive power %s",
 		quantity.Text(s.Peak), quantity.Text(s.Dwell), quantity.Text(s.Output), ripple(s), quantity.Text(s.Power)))
-	if s.Return != nil {
-		w.Hang("    ", 4, "return of the multiplier: "+quantity.Text(*s.Return)+"; what is more than that is leakage or corona  "+box)
+	if s.Within.Unit != "" {
+		w.Hang("    ", 4, "return of the multiplier: "+s.Within.Text()+" and the error of the ammeter; what is more is leakage or corona  "+box)
 	}
 	if s.Polarity != "" {
 		w.Hang("    ", 4, "polarity of the output to ground: "+s.Polarity+"  "+box)

@@ -79,7 +79,11 @@ type Step struct {
 	Polarity  string           // that the step proves: positive or negative; empty in the others
 	Ripple    *quantity.Voltage
 	Return    *quantity.Current // mean, in the multiplier's return: more is leakage or corona
-	Power     quantity.Power    // that the drive gives
+	// Within are the bounds of the return current by tolerances and drive, without the error
+	// of an instrument; no unit where an instrument of the plan reads it, or where it is not
+	// known.
+	Within    Band
+	Power     quantity.Power // that the drive gives
 	Readings  []Reading
 	Discharge evidence.Discharge
 	Dwell     quantity.Time

@@ -1,6 +1,8 @@
 package plan
 
 import (
+	"slices"
+
 	"kilovet/hv/chain"
 	"kilovet/hv/circuit"
 	"kilovet/rules/evidence"
@@ -67,10 +69,7 @@ func dials(c *chain.Chain) []dial {
 			}}
 		if in.ReadsCurrent() {
 			d.unit = "A"
-			d.read = func(e *evidence.Evidence) (float64, error) {
-				i, err := e.ReturnCurrent()
-				return float64(i), err
-			}
+			d.read = returnDial.read
 		}
 		if Floats(in) {
 			d.beside = func(e *evidence.Evidence) (float64, error) {
@@ -81,6 +80,18 @@ func dials(c *chain.Chain) []dial {
 		all = append(all, d)
 	}
 	return all
+}
+
+// returnDial reads the return current without an error of its own.
+var returnDial = dial{name: "return of the multiplier", unit: "A", error: func(*evidence.Evidence) (float64, error) { return 0, nil },
+	read: func(e *evidence.Evidence) (float64, error) {
+		i, err := e.ReturnCurrent()
+		return float64(i), err
+	}}
+
+// readsReturn reports whether an instrument of a chain reads the return current.
+func readsReturn(c *chain.Chain) bool {
+	return slices.ContainsFunc(c.Instruments, func(in chain.Instrument) bool { return in.ReadsCurrent() })
 }
 
 // Floats reports whether an instrument stands at high voltage itself.

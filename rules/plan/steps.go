@@ -72,6 +72,12 @@ func (m *maker) fill(s *Step) (err error) {
 	}
 	if i, err := at.ReturnCurrent(); err == nil {
 		s.Return = &i
+		if !readsReturn(m.e.Chain()) {
+			s.Within, err = returnDial.band(m.e, s.Condition)
+			if err != nil {
+				return err
+			}
+		}
 	}
 	if s.Power, err = at.InputPower(); err != nil {
 		return err

@@ -41,6 +41,8 @@ func graveness(o fault.Outcome) int {
 		return 2
 	case passed && !caught:
 		return 3
+	case len(o.Unknown()) > 0:
+		return 2
 	case passed:
 		return 1
 	}
@@ -72,16 +74,27 @@ func outcomeRow(o fault.Outcome) []exhibit.Cell {
 		add = o.Add
 	}
 	return []exhibit.Cell{exhibit.Words(o.Name), exhibit.Number(o.Drive), exhibit.Number(o.Output), worst, share,
-		exhibit.Words(limitsPassed(o.Passed())), exhibit.Words(caught), exhibit.Words(add)}
+		exhibit.Words(limitsPassed(o)), exhibit.Words(caught), exhibit.Words(add)}
 }
 
-// limitsPassed names the parts, spacings and nodes whose limits are passed, each once.
-func limitsPassed(all []rule.Finding) string {
-	var names []string
+// limitsPassed names the parts, spacings and nodes whose limits are passed, each once, and
+// those of which that is not known.
+func limitsPassed(o fault.Outcome) string {
+	passed, unknown := strings.Join(subjects(o.Passed()), ", "), strings.Join(subjects(o.Unknown()), ", ")
+	switch {
+	case unknown == "":
+		return passed
+	case passed == "":
+		return "not known of " + unknown
+	}
+	return passed + "; not known of " + unknown
+}
+
+func subjects(all []rule.Finding) (names []string) {
 	for _, f := range all {
 		if !slices.Contains(names, f.Subject) {
 			names = append(names, f.Subject)
 		}
 	}
-	return strings.Join(names, ", ")
+	return names
 }

@@ -101,3 +101,16 @@ func TestPowerInAStandingArc(t *testing.T) {
 		}
 	}
 }
+
+// A part without a rating is judged under no fault, and the sum of all faults says of which.
+func TestPartsWithoutARatingUnderFaults(t *testing.T) {
+	for _, c := range []struct{ was, becomes, part string }{
+		{`rated_current = "5 mA", `, "", "multiplier.diode"},
+		{`coupling_capacitor  = { value = "2.2 nF", rated_voltage = "8 kV",`, `coupling_capacitor  = { value = "2.2 nF",`, "multiplier.coupling_capacitor"},
+	} {
+		f := found(t, wholeWith(t, c.was, c.becomes), "fault.rating", "chain")
+		if f.Verdict != rule.Unassessed || !strings.Contains(f.Because, c.part) {
+			t.Errorf("%s: %+v", c.part, f)
+		}
+	}
+}

@@ -223,7 +223,7 @@ func summary(e *evidence.Evidence, findings []rule.Finding) rule.Finding {
 	}
 	f.Because = fmt.Sprintf("of %d classes of faults %d take another part above its rating; of these an independent trip catches %d",
 		len(classes(StudyAll(e))), len(findings), caught)
-	if err := uncomputed(StudyAll(e)); err != nil {
+	if err := firstOf(uncomputed(StudyAll(e)), unrated(StudyAll(e))); err != nil {
 		return f.Lacking(err)
 	}
 	if met == len(findings) {

@@ -2,6 +2,8 @@ package fault
 
 import (
 	"fmt"
+	"slices"
+	"strings"
 
 	"kilovet/hv/lack"
 	"kilovet/rules/rule"
@@ -44,4 +46,38 @@ func withUnknown(found []rule.Finding, about rule.Finding, all []Outcome, nothin
 		return rule.Over(nothing)
 	}
 	return rule.Judgement{Findings: found}
+}
+
+// unrated is the lack of ratings among some faults, nil where all are known: what a fault
+// does to a part without a rating is judged by nobody, and each such part is named.
+func unrated(all []Outcome) error {
+	var names, keys []string
+	for _, o := range all {
+		for _, f := range o.Unknown() {
+			if !isRating(f) {
+				continue
+			}
+			if !slices.Contains(names, f.Subject) {
+				names = append(names, f.Subject)
+			}
+			for _, key := range f.Missing {
+				if !slices.Contains(keys, key) {
+					keys = append(keys, key)
+				}
+			}
+		}
+	}
+	if len(names) == 0 {
+		return nil
+	}
+	return lack.Because("what faults do to parts whose ratings are not known is judged by nobody: "+strings.Join(names, ", "), keys...)
+}
+
+func firstOf(errs ...error) error {
+	for _, err := range errs {
+		if err != nil {
+			return err
+		}
+	}
+	return nil
 }

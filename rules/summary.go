@@ -6,15 +6,16 @@ import (
 	"kilovet/hv/chain"
 	"kilovet/hv/quantity"
 	"kilovet/rules/evidence"
+	"kilovet/rules/rule"
 )
 
 // summary says in a few lines what the chain is and does.
 func summary(e *evidence.Evidence) []Line {
 	c := e.Chain()
 	if !e.HasSupply() {
-		text := fmt.Sprintf("%d spacings at stated voltages, no supply", len(c.Spacings))
+		text := rule.Number(len(c.Spacings), "spacing", "spacings") + " at stated voltages, no supply"
 		if n := len(c.Feedthroughs); n > 0 {
-			text = fmt.Sprintf("%d spacings and %d feedthroughs at stated voltages, no supply", len(c.Spacings), n)
+			text = rule.Number(len(c.Spacings), "spacing", "spacings") + " and " + rule.Number(n, "feedthrough", "feedthroughs") + " at stated voltages, no supply"
 		}
 		return []Line{{"Chain", text}}
 	}

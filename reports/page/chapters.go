@@ -175,7 +175,7 @@ func (n *writer) tables(c digest.Chapter) []Block {
 		out, narrow := set(t)
 		out.Title, out.Note, out.Anchor = title, tableNote(t), to
 		if rest > 0 {
-			out.Legend = append(out.Legend, plain(fmt.Sprintf("%d more rows of %s are in the JSON results and with --all.", rest, n.labels[to])))
+			out.Legend = append(out.Legend, plain(fmt.Sprintf("%d more %s of %s %s in the JSON results and with --all.", rest, plural(rest, "row", "rows"), n.labels[to], plural(rest, "is", "are"))))
 		}
 		all = append(all, sized{out, narrow})
 	}

@@ -92,7 +92,7 @@ func reviewed(r *rules.Review, s rules.SignOff) Section {
 
 // powerUp says how much of the plan was read: what was not is as unknown as before.
 func powerUp(c *readings.Comparison) string {
-	text := fmt.Sprintf("%d of %d readings of the plan were taken, each within its bounds", len(c.Rows), c.Planned)
+	text := fmt.Sprintf("%d of %s of the plan %s taken, each within its bounds", len(c.Rows), count(c.Planned, "reading"), plural(len(c.Rows), "was", "were"))
 	if missing := c.Planned - len(c.Rows); missing > 0 {
 		text += fmt.Sprintf("; %d %s not taken, and nothing is known of what %s would have shown", missing, plural(missing, "was", "were"), plural(missing, "it", "they"))
 	}

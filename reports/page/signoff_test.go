@@ -81,7 +81,7 @@ func TestASheetWithoutLastDayHasABlankForIt(t *testing.T) {
 // The sheet says how much of the plan was read, and what nobody knows of the rest.
 func TestTheSheetSaysWhatWasNotRead(t *testing.T) {
 	for want, read := range map[string]readings.Comparison{
-		"1 of 8 readings of the plan were taken, each within its bounds; 7 were not taken": {Rows: make([]readings.Row, 1), Planned: 8, Sound: true},
+		"1 of 8 readings of the plan was taken, each within its bounds; 7 were not taken": {Rows: make([]readings.Row, 1), Planned: 8, Sound: true},
 		"the polarity was not taken": {Rows: make([]readings.Row, 1), Planned: 8, Sound: true},
 		"8 of 8 readings of the plan were taken, each within its bounds; the polarity is as described": {Rows: make([]readings.Row, 8), Planned: 8, Sound: true, Sign: readings.Proved},
 	} {

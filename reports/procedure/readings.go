@@ -106,7 +106,7 @@ func suspects(w *lines.Writer, c *readings.Comparison) {
 		quantity.Significant(c.Healthy), c.Tried, c.Unseen))
 	if len(c.Suspects) == 0 {
 		w.Line("")
-		w.Hang("", 0, "Nothing that was tried explains them better than a healthy chain does.")
+		w.Hang("", 0, "Nothing that was tried explains them better than a healthy chain does whose parts, drive or instruments are at the ends of their tolerances."+hidden(c.Hidden))
 	}
 	w.Section("What they point to, the best first", len(c.Suspects))
 	for i, s := range c.Suspects {
@@ -122,6 +122,14 @@ func suspects(w *lines.Writer, c *readings.Comparison) {
 	for _, o := range c.Open {
 		w.Hang("- ", 2, o)
 	}
+}
+
+// hidden names what cannot be told from a healthy chain.
+func hidden(names []string) string {
+	if len(names) == 0 {
+		return ""
+	}
+	return " As likely is what does not show in these readings: " + strings.Join(shortened(names, 8), "; or ") + "."
 }
 
 // apart says which further readings would separate what is left standing.

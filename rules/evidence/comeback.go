@@ -12,6 +12,7 @@ import (
 // a short time.
 type Return struct {
 	Column  string
+	Parts   int // capacitors in it
 	Voltage quantity.Voltage
 	Assumed []string // dielectrics of which nothing is published
 }
@@ -35,6 +36,7 @@ func (e *Evidence) MostComesBack() (Return, error) {
 		}
 		v, assumed := bounded(b)
 		columns[i].Voltage += v
+		columns[i].Parts++
 		if assumed != "" && len(columns[i].Assumed) == 0 {
 			columns[i].Assumed = []string{assumed}
 		}

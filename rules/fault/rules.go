@@ -178,7 +178,7 @@ func judgeClass(e *evidence.Evidence, c class) (rule.Finding, bool) {
 	}
 	f := rule.Finding{Rule: "fault.rating", Subject: c.name, Concern: rule.Equipment, Relation: rule.AtMost, Place: worst.Place,
 		Under: by.Name, Sources: []rule.Source{limits.FaultSource}, Needed: worst.Needed, Provided: worst.Provided, Margin: worst.Margin,
-		Because: fmt.Sprintf("%s: %s; %d of %d such faults pass a rating", by.Name, worst.Because, passing, len(c.outcomes))}
+		Because: fmt.Sprintf("%s: %s; %s", by.Name, worst.Because, ofClass(passing, len(c.outcomes)))}
 	if m, caught := by.Caught(); caught {
 		f.Relation, f.Needed, f.Provided, f.Margin = rule.Presence, nil, nil, nil
 		f.Because += fmt.Sprintf("; the %s catches it: %s", m.Name, m.Because)
@@ -188,12 +188,30 @@ func judgeClass(e *evidence.Evidence, c class) (rule.Finding, bool) {
 	if keepsOff(*worst) {
 		f.Verdict, f.Concern, f.Graded = rule.Fails, worst.Concern, false
 	}
-	f.Because += fmt.Sprintf(", %d of them caught by nothing described (%s)", uncaught, whyNot(by.Measures))
+	f.Because += fmt.Sprintf(", %s caught by nothing described (%s)", ofThem(uncaught, passing), whyNot(by.Measures))
 	f.Remedy = by.Add
 	if f.Remedy == "" {
 		f.Remedy = addRegulation
 	}
 	return f, true
+}
+
+// ofClass says how many faults of a class pass a rating.
+func ofClass(passing, all int) string {
+	switch {
+	case all == 1:
+		return "the only such fault passes a rating"
+	case passing == 1:
+		return fmt.Sprintf("1 of %d such faults passes a rating", all)
+	}
+	return fmt.Sprintf("%d of %d such faults pass a rating", passing, all)
+}
+
+func ofThem(n, all int) string {
+	if all == 1 {
+		return "and is"
+	}
+	return fmt.Sprintf("%d of them", n)
 }
 
 // whyNot says why no measure catches a fault.
@@ -221,15 +239,15 @@ func summary(e *evidence.Evidence, findings []rule.Finding) rule.Finding {
 			met++
 		}
 	}
-	f.Because = fmt.Sprintf("of %d classes of faults %d take another part above its rating; of these an independent trip catches %d",
-		len(classes(StudyAll(e))), len(findings), caught)
+	f.Because = fmt.Sprintf("of %s %s another part above its rating; of these an independent trip catches %d",
+		rule.Number(len(classes(StudyAll(e))), "class of faults", "classes of faults"), rule.Number(len(findings), "takes", "take"), caught)
 	if err := firstOf(uncomputed(StudyAll(e)), unrated(StudyAll(e))); err != nil {
 		return f.Lacking(err)
 	}
 	if met == len(findings) {
 		return f.There(true)
 	}
-	f.Because += "; " + fmt.Sprintf("%d leave a part above its rating, which is marginal by decision: one broken part may cost another", len(findings)-met)
+	f.Because += "; " + fmt.Sprintf("%s a part above its rating, which is marginal by decision: one broken part may cost another", rule.Number(len(findings)-met, "leaves", "leave"))
 	f.Verdict, f.Graded, f.Remedy = rule.Marginal, true, "read the table of faults, the worst first, and add what stands beside each"
 	return f
 }

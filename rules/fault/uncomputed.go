@@ -25,7 +25,7 @@ func uncomputed(all []Outcome) error {
 	if n == 0 {
 		return nil
 	}
-	why := fmt.Sprintf("%d of %d faults were not computed, first %s: %v", n, len(all), first.Name, first.Err)
+	why := fmt.Sprintf("not computed of %s: %d, first %s: %v", rule.Number(len(all), "fault", "faults"), n, first.Name, first.Err)
 	if l := lack.Of(first.Err); l != nil {
 		return &lack.Lack{Kind: l.Kind, Keys: l.Keys, Why: why}
 	}

@@ -74,8 +74,11 @@ var emissionLaw = rule.Rule{
 		if err != nil {
 			return rule.One(f.Lacking(err))
 		}
-		apart := quantity.Fraction(math.Abs(float64(law/g.Emission.V) - 1))
 		f.Because = fmt.Sprintf("stated %s, by the law %s", quantity.Text(g.Emission.V), quantity.Text(law))
+		if g.Emission.V == 0 { // nothing is a share of nothing
+			return rule.One(f.There(law == 0).WithoutRemedyIfMet())
+		}
+		apart := quantity.Fraction(math.Abs(float64(law/g.Emission.V) - 1))
 		return rule.One(f.Most(rule.Of(apart), rule.Of(limits.LawApart), float64(limits.LawApart/limits.LawComfort)-1).WithoutRemedyIfMet())
 	},
 }

@@ -87,10 +87,10 @@ func judgeInterlock(access *chain.Access, f rule.Finding) rule.Finding {
 		return f.There(false)
 	}
 	if !strings.Contains(lock.ActsOn.V, "drive") && !strings.Contains(lock.ActsOn.V, "mains") {
-		f.Because, f.Remedy, f.Relation, f.Place = "it acts on the "+lock.ActsOn.V+", not on the drive supply", "let it cut the drive supply or its mains", rule.Presence, lock.ActsOn.Place
+		f.Because, f.Remedy, f.Relation, f.Place = fmt.Sprintf("it acts on %q, not on the drive supply", lock.ActsOn.V), "let it cut the drive supply or its mains", rule.Presence, lock.ActsOn.Place
 		return f.There(false)
 	}
-	f.Because = fmt.Sprintf("switches at each door: %d; they act on the %s", lock.Switches.V, lock.ActsOn.V)
+	f.Because = fmt.Sprintf("switches at each door: %d; they act on %q", lock.Switches.V, lock.ActsOn.V)
 	f.Remedy = "fit two independent switches at each door"
 	return f.Least(count(lock.Switches.V), count(2), 0).WithoutRemedyIfMet()
 }

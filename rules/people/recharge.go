@@ -50,6 +50,9 @@ func judgeRecharge(e *evidence.Evidence) rule.Judgement {
 		}
 	}
 	f.Because = fmt.Sprintf("up to %s come back at %s after a short discharge", quantity.Text(back.Voltage), back.Column)
+	if back.Parts > 1 {
+		f.Because = fmt.Sprintf("up to %s come back over the whole column of %s after a short discharge, what its %d capacitors get back by themselves added up", quantity.Text(back.Voltage), back.Column, back.Parts)
+	}
 	f.Remedy = "leave the rod on, or short what was discharged, until the work is done"
 	if quantity.AtMost(back.Voltage, limits.TouchVoltage) || access.EarthingRod == nil {
 		return *only(f.Most(rule.Of(back.Voltage), rule.Of(limits.TouchVoltage), 0).Assume(back.Assumed...).WithoutRemedyIfMet())

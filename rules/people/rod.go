@@ -119,10 +119,10 @@ func judgeOneOpen(e *evidence.Evidence) rule.Judgement {
 	}
 	f.Under = string(evidence.Lost)
 	if stays == 0 {
-		f.Because = fmt.Sprintf("none of %d parts, open alone, leaves a node above 60 V", len(opened))
+		f.Because = fmt.Sprintf("none of %s, open alone, leaves a node above 60 V", rule.Number(len(opened), "part", "parts"))
 		return *only(f.There(true))
 	}
-	f.Because = fmt.Sprintf("%d of %d parts, open alone, leave a node charged; with %s open %s stays at %s", stays, len(opened), worst.Part, worst.Worst.Node, quantity.Text(worst.Worst.Left))
+	f.Because = fmt.Sprintf("a node stays charged with %d of %s open alone; with %s open %s stays at %s", stays, rule.Number(len(opened), "part", "parts"), worst.Part, worst.Worst.Node, quantity.Text(worst.Worst.Left))
 	f.Remedy = "discharge every column node, filter, output and cathode with the rod, one by one, whatever a meter says"
 	return *only(f.There(access.EarthingRod != nil).Assume("a rod is put to every node before anything is touched"))
 }

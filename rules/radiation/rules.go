@@ -48,7 +48,7 @@ var ports = rule.Rule{
 			return rule.One(f.Lacking(err))
 		}
 		f.Place = access.PortsDescribed.Place
-		f.Because = fmt.Sprintf("electrons can reach %s; %d walls, ports and windows are described as all there are", quantity.Text(reached), len(e.Chain().Shields))
+		f.Because = fmt.Sprintf("electrons can reach %s; %s described as all there are", quantity.Text(reached), rule.Number(len(e.Chain().Shields), "wall, port or window is", "walls, ports and windows are"))
 		return rule.One(f.There(true))
 	},
 }

@@ -33,6 +33,9 @@ type Comparison struct {
 	// healthy chain; Open names those that could not be computed.
 	Tried, Unseen int
 	Open          []string
+	// Hidden names those that cannot be told from a healthy chain, what fits best first, where
+	// nothing explains deviating readings better than one does: they are one class with it.
+	Hidden []string
 }
 
 // Row is one reading beside what is expected at the drive that was really set.

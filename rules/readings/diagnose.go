@@ -65,6 +65,9 @@ func diagnose(e *evidence.Evidence, all []taken, c *Comparison) {
 	seen, faint := b.sorted(trials, healthy.misfit, c)
 	c.Suspects = b.grouped(seen)
 	b.join(c.Suspects, faint)
+	if len(c.Suspects) == 0 {
+		c.Hidden = b.hidden(trials)
+	}
 	c.Apart, c.Standing = b.apart(c.Suspects)
 }
 
@@ -90,6 +93,21 @@ func (b *bench) sorted(trials []trial, healthy float64, c *Comparison) (seen, fa
 	}
 	slices.SortStableFunc(seen, func(x, y *trial) int { return cmp.Compare(x.misfit, y.misfit) })
 	return seen, faint
+}
+
+// hidden are the hypotheses that cannot be told from a healthy chain.
+func (b *bench) hidden(trials []trial) (names []string) {
+	var all []*trial
+	for i := range trials {
+		if t := &trials[i]; t.err == nil && !t.within && b.misfit(t.predicted, b.healthy) < alike {
+			all = append(all, t)
+		}
+	}
+	slices.SortStableFunc(all, func(x, y *trial) int { return cmp.Compare(x.misfit, y.misfit) })
+	for _, t := range all {
+		names = append(names, t.name)
+	}
+	return names
 }
 
 // grouped puts together what these readings cannot tell apart, and keeps the best.

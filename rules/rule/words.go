@@ -3,6 +3,8 @@
 package rule
 
 import (
+	"fmt"
+
 	"kilovet/hv/document"
 	"kilovet/hv/quantity"
 )
@@ -111,3 +113,11 @@ type Caution struct{ Subject, Text string }
 
 // PassedOver is a rule that did not apply, and why.
 type PassedOver struct{ Rule, Because string }
+
+// Number is a number of things in words.
+func Number(n int, one, many string) string {
+	if n == 1 {
+		return "1 " + one
+	}
+	return fmt.Sprintf("%d %s", n, many)
+}

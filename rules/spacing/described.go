@@ -57,7 +57,7 @@ func judgeDescribed(e *evidence.Evidence) rule.Judgement {
 		}
 	}
 	if !missing {
-		all.Because = fmt.Sprintf("all %d pairs of nodes that need one have a spacing or a rated part", len(pairs))
+		all.Because = "a spacing or a rated part stands between " + rule.Number(len(pairs), "pair of nodes that needs one", "pairs of nodes that need one") + ", which is all"
 		j.Findings = append(j.Findings, all.There(true))
 	}
 	return j

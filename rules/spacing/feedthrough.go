@@ -99,7 +99,7 @@ func judgeWeakest(f *chain.Feedthrough, all []rule.Finding) rule.Finding {
 	x.Verdict, x.Under, x.Place, x.Remedy, x.Missing, x.Assumptions = worst.Verdict, worst.Under, worst.Place, worst.Remedy, worst.Missing, worst.Assumptions
 	x.Sources = worst.Sources
 	part := strings.TrimPrefix(worst.Subject, f.Name.V+": ")
-	x.Because = fmt.Sprintf("of %d findings about it the weakest is %s of its %s%s: %s", n, strings.TrimPrefix(strings.TrimPrefix(worst.Rule, "spacing."), "feedthrough."), part, inHand(*worst), worst.Because)
+	x.Because = fmt.Sprintf("of %s about it the weakest is %s of its %s%s: %s", rule.Number(n, "finding", "findings"), strings.TrimPrefix(strings.TrimPrefix(worst.Rule, "spacing."), "feedthrough."), part, inHand(*worst), worst.Because)
 	return x
 }
 

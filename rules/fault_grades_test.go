@@ -114,3 +114,12 @@ func TestPartsWithoutARatingUnderFaults(t *testing.T) {
 		}
 	}
 }
+
+// A trip that catches a fault since strays that would keep it from that are not given rests
+// on their being none.
+func TestATripRestsOnStraysThatAreNotGiven(t *testing.T) {
+	f := found(t, wholeWith(t, `resistance = "60 ohm", capacitance = "1 pF"`, `resistance = "60 ohm"`), "fault.rating", "divider element off by ten")
+	if f.Verdict != rule.Marginal {
+		t.Errorf("%+v", f)
+	}
+}

@@ -67,7 +67,7 @@ func measures(e *evidence.Evidence, f Fault) []Measure {
 }
 
 func overVoltage(e *evidence.Evidence, f Fault, t *chain.VoltageTrip) Measure {
-	m := Measure{Name: "over-voltage trip"}
+	m := Measure{Name: "over-voltage trip", Assumes: e.Opposing()} // what it sees is less with what opposes
 	see := (*evidence.Evidence).Sensed
 	switch sensorOf(t.Senses.V) {
 	case unknown:

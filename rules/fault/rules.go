@@ -242,6 +242,7 @@ func summary(e *evidence.Evidence, findings []rule.Finding) rule.Finding {
 	f.Because = fmt.Sprintf("of %s %s another part above its rating; of these an independent trip catches %d",
 		rule.Number(len(classes(StudyAll(e))), "class of faults", "classes of faults"), rule.Number(len(findings), "takes", "take"), caught)
 	if err := firstOf(uncomputed(StudyAll(e)), unrated(StudyAll(e))); err != nil {
+		f.Because = "of what was computed and has a rating: " + f.Because
 		return f.Lacking(err)
 	}
 	if met == len(findings) {

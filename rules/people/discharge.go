@@ -44,7 +44,7 @@ func judgeWaiting(e *evidence.Evidence) rule.Judgement {
 	f.Remedy = "state a longer waiting time, or fit a permanent bleeder that is faster"
 	if slowest.Never {
 		f.Because = fmt.Sprintf("%s stays at %s: nothing permanent discharges it", slowest.Node, quantity.Text(slowest.Left))
-		f.Relation = rule.Presence
+		f.Relation, f.Remedy = rule.Presence, "fit a permanent bleeder: no waiting time is long enough"
 		return *only(f.There(false))
 	}
 	f.Because = fmt.Sprintf("%s is the last to fall to 60 V, after %s", slowest.Node, quantity.Text(slowest.Time))

@@ -196,7 +196,7 @@ var rodVoltage = rule.Rule{
 func peakCurrent(v quantity.Voltage, r quantity.Resistance) string {
 	i, err := body.Current(v, r, 0)
 	if err != nil {
-		return "no limit to the current"
+		return "a current that nothing limits"
 	}
 	return quantity.Text(i)
 }

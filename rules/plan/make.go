@@ -22,7 +22,7 @@ func Of(e *evidence.Evidence) (*Plan, error) {
 	if !e.HasSupply() {
 		return nil, lack.Key("drive", "multiplier")
 	}
-	m := &maker{e: e, bench: Bench(e.Chain()), plan: &Plan{Takes: takes(e.Chain()), Stops: stops()}}
+	m := &maker{e: e, bench: Bench(e.Chain()), plan: &Plan{Takes: takes(e.Chain()), Stops: stops(e.Chain())}}
 	m.plan.Polarity = m.polarity()
 	m.cold()
 	m.before()
@@ -44,7 +44,9 @@ func takes(c *chain.Chain) []string {
 	all := []string{
 		fmt.Sprintf("the peak of the drive is set or read to %.0f %% (common practice, no source)", 100*driveShare),
 		"levels and times of the steps are common practice, no source",
-		"without emission a disconnected gun and a cold one read alike",
+	}
+	if c.Gun.IsFitted() {
+		all = append(all, "without emission a disconnected gun and a cold one read alike")
 	}
 	if b := c.Beam; b != nil && b.MeasuredRipple.Set() {
 		all = append(all, "ripple and readings of every step are computed; the measured record "+b.MeasuredRipple.V+" takes the place of the computed ripple in the disturbance and blur of the beam alone, at full voltage with the gun working")
@@ -65,14 +67,16 @@ func takes(c *chain.Chain) []string {
 }
 
 // stops is what ends every step at once.
-func stops() []string {
-	return []string{
+func stops(c *chain.Chain) []string {
+	all := []string{
 		"a reading outside its bounds, or one that goes on moving when the drive does not",
 		"more current in the return than expected: leakage or corona, to be found before going on",
 		"a hiss, a glow, a smell of ozone, a flash, a trip",
-		"pressure above the permit",
-		"anything that nobody present can explain",
 	}
+	if c.Gun.IsFitted() || c.Vacuum != nil {
+		all = append(all, "pressure above the permit")
+	}
+	return append(all, "anything that nobody present can explain")
 }
 
 // before is what is done before the first voltage.
@@ -151,7 +155,7 @@ func (m *maker) trips() {
 
 func textOr[Q quantity.Number](q Q, err error) string {
 	if err != nil {
-		return err.Error()
+		return "what is not known: " + err.Error()
 	}
 	return quantity.Text(q)
 }
@@ -173,7 +177,11 @@ func (m *maker) after() {
 	default:
 		todo = append(todo, m.wait(worst))
 	}
-	todo = append(todo, "Watch the meter fall, and never trust a meter alone.",
+	watch := "Watch the meter fall, and never trust a meter alone."
+	if len(Metered(m.e.Chain())) == 0 {
+		watch = "No meter is described that would show the fall: every node counts as charged until the rod has been on it."
+	}
+	todo = append(todo, watch,
 		"Rod on the output, the multiplier's top and every column node, one after the other, then leave the earth lead on.")
 	if rest, err := m.e.Residue(); err == nil && rest > 60 {
 		todo = append(todo, "An intact ladder keeps up to "+quantity.Text(rest)+": the rod at every column node is not optional.")

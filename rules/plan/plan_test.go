@@ -193,3 +193,40 @@ func TestTheWaitIsTheLonger(t *testing.T) {
 		}
 	}
 }
+
+// What is not there is not spoken of: no gun, no meter; and what is not known is no value.
+func TestAPlanSpeaksOfWhatIsThere(t *testing.T) {
+	const bare = `format = 1
+[drive]
+frequency = "30 kHz"
+peak = "1 kV"
+[multiplier]
+polarity = "positive"
+stages = 2
+coupling_capacitor = { value = "1 nF" }
+smoothing_capacitor = { value = "1 nF" }
+[protection]
+over_voltage = { trip = "4.5 kV", senses = "second divider", acts_on = "drive supply" }
+`
+	for text, wants := range map[string][]string{
+		bare: {"No meter is described that would show the fall"},
+		strings.Replace(bare, `coupling_capacitor = { value = "1 nF" }`, `coupling_capacitor = { value = "1 nF", dielectric = "X7R" }`, 1): {"what is not known: X7R"},
+	} {
+		c, faults := chain.Read([]byte(text))
+		if len(faults) > 0 {
+			t.Fatal(faults)
+		}
+		p := planned(t, evidence.New(c))
+		said := strings.Join(append(append(p.Takes, p.Stops...), p.After...), "\n") + p.Trips[0].Working
+		for _, want := range wants {
+			if !strings.Contains(said, want) {
+				t.Errorf("%q is not said in %s", want, said)
+			}
+		}
+		for _, not := range []string{"disconnected gun", "pressure above"} {
+			if strings.Contains(said, not) {
+				t.Errorf("%q is said", not)
+			}
+		}
+	}
+}

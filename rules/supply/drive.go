@@ -4,7 +4,6 @@ package supply
 import (
 	"fmt"
 
-	"kilovet/hv/chain"
 	"kilovet/hv/lack"
 	"kilovet/hv/quantity"
 	"kilovet/rules/evidence"
@@ -39,21 +38,8 @@ var headroom = rule.Rule{
 		f.Because = fmt.Sprintf("%s peak holds %s under load, the drive gives %s", quantity.Text(needed), quantity.Text(c.Regulation.Set.V), quantity.Text(c.Drive.Peak.V))
 		f.Remedy = "raise the drive, add a stage, raise frequency or capacitance, or lower the load"
 		f = f.Least(rule.Of(c.Drive.Peak.V), rule.Of(needed), limits.HeadroomMargin)
-		return rule.One(f.Assume(opposing(c)...).WithoutRemedyIfMet())
+		return rule.One(f.Assume(e.Opposing()...).WithoutRemedyIfMet())
 	},
-}
-
-// opposing is what takes something from the drive and counts as none, since it is not given.
-func opposing(c *chain.Chain) []string {
-	keys := notGiven(c.Multiplier)
-	if !c.Drive.Resistance.Set() {
-		keys = append(keys, c.Drive.Resistance.Key)
-	}
-	var all []string
-	for _, key := range keys {
-		all = append(all, "no "+key+": it is not given")
-	}
-	return all
 }
 
 var balanceSource = rule.Source{Text: "at light load a fraction of a per cent of unbalance gives a symmetrical cascade the ripple of a half-wave one (charge balance)", Mark: rule.Derived, Governs: true}

@@ -4,7 +4,6 @@ import (
 	"fmt"
 
 	"kilovet/hv/chain"
-	"kilovet/hv/document"
 	"kilovet/hv/lack"
 	"kilovet/hv/quantity"
 	"kilovet/rules/evidence"
@@ -50,7 +49,7 @@ func judgeStrays(e *evidence.Evidence, m *chain.Multiplier) rule.Finding {
 	if d.Rest == nil {
 		f.Because += ", the load " + quantity.Text(d.Load)
 	}
-	if unknown := notGiven(m); len(unknown) > 0 {
+	if unknown := e.StraysNotGiven(); len(unknown) > 0 {
 		f.Because += picofarad(e)
 		for _, key := range unknown {
 			f = f.Assume("no " + key + ": it is not given")
@@ -58,23 +57,6 @@ func judgeStrays(e *evidence.Evidence, m *chain.Multiplier) rule.Finding {
 	}
 	f.Remedy = "shorten what stands side by side, use diodes of less capacitance, larger capacitors or fewer stages; what they take grows steeply with the stages"
 	return f.Most(rule.Of(quantity.Fraction(max(d.Stray, 0)/none)), rule.Of(limits.StrayShare), float64(limits.StrayShare/limits.StrayComfort)-1).WithoutRemedyIfMet()
-}
-
-// notGiven are the keys of strays that the description leaves out.
-func notGiven(m *chain.Multiplier) []string {
-	var keys []string
-	for _, g := range []document.Given[quantity.Capacitance]{m.StrayBetweenColumns, m.StrayToGround} {
-		if !g.Set() {
-			keys = append(keys, g.Key)
-		}
-	}
-	if m.Diode == nil {
-		return append(keys, "multiplier.diode.capacitance")
-	}
-	if !m.Diode.Capacitance.Set() {
-		keys = append(keys, m.Diode.Capacitance.Key)
-	}
-	return keys
 }
 
 // picofarad says what a picofarad a stage would take.

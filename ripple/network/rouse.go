@@ -6,8 +6,6 @@ package network
 type rousing struct {
 	pressing float64 // how hard the diodes are pressed in the guess, as attempts say it
 	anew     int     // guesses that may yet be made anew
-	halve    int     // halvings that are left
-	watched  bool    // the last correction began where no diode slept
 }
 
 // press guesses a state with the diodes pressed to conduct, as hard as an attempt says.
@@ -17,41 +15,16 @@ func (s *search) press(how float64) {
 	s.aim()
 }
 
-// mostHalved is the number of times corrections may be halved in one attempt. Without load
-// diodes may well sleep where all is right: only those are halved that have not led nearer
-// by helpful.
-const (
-	mostHalved = 6
-	helpful    = 0.01
-)
-
-// watch has the correction that follows halved where it puts diodes to sleep.
-func (s *search) watch(g grade) {
-	s.watched = g == rough && s.halve > 0 && !s.sleeps()
-}
-
-// rouse guesses anew, the diodes pressed twice as hard, or takes half of the last
-// correction back, where a diode sleeps. It reports whether it did.
+// rouse guesses anew, the diodes pressed twice as hard, where the guess leaves a diode
+// asleep. It reports whether it did.
 func (s *search) rouse() bool {
-	switch {
-	case s.anew > 0 && s.sleeps():
-		s.anew--
-		s.press(2 * s.pressing)
-	case s.watched && s.halve > 0 && norm(s.r) > helpful*s.last && s.sleeps():
-		s.halve--
-		s.halfway(&s.sound)
-	default:
-		s.anew, s.watched = 0, false
+	if s.anew == 0 || !s.sleeps() {
+		s.anew = 0
 		return false
 	}
+	s.anew--
+	s.press(2 * s.pressing)
 	return true
-}
-
-// halfway goes half of the way back to a state.
-func (s *search) halfway(to *spot) {
-	for i, x := range to.x {
-		s.x[i] += (x - s.x[i]) / 2
-	}
 }
 
 func (s *search) sleeps() bool { return s.sleeper() >= 0 }

@@ -130,7 +130,6 @@ func (s *search) once(g grade, done func() bool) (finished bool, err error) {
 	}
 	s.mark(&s.sound)
 	s.last = size
-	s.watch(g)
 	s.follows(f)
 	if math.Abs(f-1) > strange {
 		s.last, s.trial = math.Inf(1), false

@@ -127,7 +127,7 @@ func (s *search) begin(a attempt) error {
 	if a.creep {
 		return s.creep(rough, nearby)
 	}
-	s.patience, s.rousing.anew, s.rousing.halve = a.leaps, a.anew, mostHalved
+	s.patience, s.rousing = a.leaps, rousing{pressing: a.press, anew: a.anew}
 	return s.approach(rough, nearby)
 }
 

@@ -19,14 +19,9 @@ func TestUnreachedSaysWhy(t *testing.T) {
 	}
 }
 
-// TestSleepersAreRoused holds what a search costs whose first guess leaves a diode asleep,
-// and one whose first correction puts diodes to sleep.
+// TestSleepersAreRoused holds what a search costs whose first guess leaves a diode asleep.
 func TestSleepersAreRoused(t *testing.T) {
 	if w := steady(t, build(t, examples()["6 stages with filter and bias"])).Work; w.Products > 30 {
-		t.Errorf("a sleeper in the guess: %+v", w)
-	}
-	resonant := references(t)[8] // 2 mH of leakage inductance under 1 mA
-	if w := steady(t, build(t, resonant.describe())).Work; w.Periods > 12 {
-		t.Errorf("sleepers after a correction: %+v", w)
+		t.Errorf("%+v", w)
 	}
 }

@@ -25,13 +25,17 @@ func helpText(c *cobra.Command, width int) []byte {
 	first, rest := paragraphs(c)
 	prose(&b, first, width)
 	if c.Example != "" {
-		fmt.Fprintf(&b, "\n%s\n", c.Example)
+		b.WriteByte('\n')
+		examples(&b, c.Example, width)
 	}
 	if rest != "" {
 		b.WriteByte('\n')
 		prose(&b, rest, width)
 	}
-	fmt.Fprintf(&b, "\nCommand line\n  %s\n", usage(c))
+	b.WriteString("\nCommand line\n")
+	for i, line := range wrapped(usage(c), width-6) {
+		fmt.Fprintf(&b, "%*s%s\n", 2+4*min(i, 1), "", line)
+	}
 	listed(&b, "Commands", commands(c), width)
 	listed(&b, "Flags", flags(c), width)
 	if c.HasAvailableSubCommands() {
@@ -40,14 +44,14 @@ func helpText(c *cobra.Command, width int) []byte {
 	return b.Bytes()
 }
 
-// prose writes paragraphs into a width; lines that are indented stay as they are.
+// prose writes paragraphs into a width; lines that are indented are examples.
 func prose(b *bytes.Buffer, text string, width int) {
 	for i, paragraph := range strings.Split(text, "\n\n") {
 		if i > 0 {
 			b.WriteByte('\n')
 		}
 		if strings.HasPrefix(paragraph, " ") {
-			fmt.Fprintln(b, paragraph)
+			examples(b, paragraph, width)
 			continue
 		}
 		for _, line := range wrapped(paragraph, min(width, 80)) {

@@ -28,9 +28,11 @@ func TestHelpFitsAndBeginsWithExamples(t *testing.T) {
 		c.InitDefaultHelpFlag()
 		text := string(helpText(c, 80))
 		lines := strings.Split(text, "\n")
-		for _, l := range lines {
-			if utf8.RuneCountInString(l) > 80 {
-				t.Errorf("%s: %d columns: %s", c.CommandPath(), utf8.RuneCountInString(l), l)
+		for _, width := range []int{80, 60} {
+			for l := range strings.Lines(string(helpText(c, width))) {
+				if n := utf8.RuneCountInString(strings.TrimRight(l, "\n")); n > width {
+					t.Errorf("%s: %d columns in %d: %s", c.CommandPath(), n, width, l)
+				}
 			}
 		}
 		if head := strings.Join(lines[:min(10, len(lines))], "\n"); !strings.Contains(head, "\n  kilovet ") {
@@ -48,7 +50,9 @@ func TestHelpFitsAndBeginsWithExamples(t *testing.T) {
 func TestHelpIsWrapped(t *testing.T) {
 	c := everyCommand()[0]
 	narrow, wide := helpText(c, 40), helpText(c, 100)
-	words := func(b []byte) string { return strings.Join(strings.Fields(string(b)), " ") }
+	words := func(b []byte) string {
+		return strings.Join(strings.Fields(strings.ReplaceAll(string(b), " \\\n", "\n")), " ")
+	}
 	if words(narrow) != words(wide) || bytes.Count(narrow, []byte("\n")) <= bytes.Count(wide, []byte("\n")) {
 		t.Errorf("narrow:\n%s", narrow)
 	}

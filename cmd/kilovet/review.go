@@ -63,15 +63,15 @@ Exit status: 0 nothing fails and nothing is unassessed; 1 something does; 2 the
 description or the command line cannot be used, and nothing was written; 3 a
 file could not be read or written; 4 the program itself failed.`
 
-const reviewExamples = `  kilovet review chain.toml                    one screen
-  kilovet review --all chain.toml              every figure, finding and source
-  kilovet review --pdf review.pdf chain.toml   sheets to read and file
-  kilovet review --html page.html chain.toml   one page for the browser
-  kilovet review --json - chain.toml           results for other programs
-  kilovet review --local house.toml chain.toml under a stricter local code
-  kilovet review --without faults chain.toml   quicker; exit status 1
-  kilovet review -                             a description on standard input
-  kilovet review                               the built-in example`
+const reviewExamples = `  kilovet review chain.toml                     one screen
+  kilovet review --all chain.toml               every figure, finding and source
+  kilovet review --pdf review.pdf chain.toml    sheets to read and file
+  kilovet review --html page.html chain.toml    one page for the browser
+  kilovet review --json - chain.toml            results for other programs
+  kilovet review --local house.toml chain.toml  under a stricter local code
+  kilovet review --without faults chain.toml    quicker; exit status 1
+  kilovet review -                              a description on standard input
+  kilovet review                                the built-in example`
 
 // builtIn stands first on a review that nobody asked for by name.
 const builtIn = "Built-in example: no file was named"

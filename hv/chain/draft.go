@@ -10,10 +10,11 @@ import (
 
 const draftHead = `A description for kilovet: every key there is, with an example.
 
-Replace every value by your own and delete what your chain has not got: an absent
-key is reported as missing where a rule needs it, a wrong one is believed. Take away
-the # before a key or header to use it, with all that your chain has of its table.
-Every quantity is text with its unit; counts and pure numbers stand without quotes.`
+Replace every value by your own and delete what your chain has not got: an
+absent key is reported as missing where a rule needs it, a wrong one is
+believed. Take away the # before a key or header to use it, with all that your
+chain has of its table. Every quantity is text with its unit; counts and pure
+numbers stand without quotes.`
 
 // Draft writes a description to start from. It reads without faults as it stands:
 // a half-wave multiplier with a load and a spacing; everything else is switched off.

@@ -7,6 +7,7 @@ import (
 	"slices"
 	"strings"
 	"testing"
+	"unicode/utf8"
 
 	"pgregory.net/rapid"
 
@@ -20,6 +21,15 @@ func draft(t *testing.T) string {
 		t.Fatal(err)
 	}
 	return b.String()
+}
+
+// Only a value that is longer by itself goes beyond the width of a terminal.
+func TestDraftFitsATerminal(t *testing.T) {
+	for i, line := range strings.Split(draft(t), "\n") {
+		if n := utf8.RuneCountInString(line); n > 80 && (strings.Contains(line, " # ") || !strings.Contains(line, " = ")) {
+			t.Errorf("line %d has %d columns: %s", i+1, n, line)
+		}
+	}
 }
 
 func TestDraftReadsWithoutFaults(t *testing.T) {
@@ -114,9 +124,12 @@ func TestManyFaultsAtOnce(t *testing.T) {
 	})
 }
 
+// brokenComment is where a comment goes on in the next line.
+var brokenComment = regexp.MustCompile(`\n *#  +|\n +# `)
+
 // TestDraftHoldsEveryKey looks for the last part of every declared key with its meaning.
 func TestDraftHoldsEveryKey(t *testing.T) {
-	text := draft(t)
+	text := brokenComment.ReplaceAllString(draft(t), " ")
 	for _, d := range document.Describe(&Chain{}) {
 		if !strings.Contains(text, d.Key) || !strings.Contains(text, d.Means) {
 			t.Errorf("%s is not in the draft", d.Path)

@@ -6,6 +6,7 @@ import (
 	"io"
 	"reflect"
 	"strings"
+	"unicode/utf8"
 )
 
 // Outline says what a draft of a description shows.
@@ -82,7 +83,7 @@ func (d *drafter) inner(key Declared, prefix string, off bool) {
 	switch {
 	case key.headed(strings.TrimSuffix(key.Path, key.Key)):
 	case key.Holds == OneTable:
-		d.WriteString("# " + prefix + key.Key + ": " + key.Means + "\n")
+		d.comment("# ", prefix+key.Key+": "+key.Means)
 		d.section(key.kind, key.Path, prefix+key.Key+".", off)
 	default:
 		value := d.Instead(key.Path)
@@ -100,15 +101,53 @@ func (d *drafter) items(key Declared) {
 		return
 	}
 	for _, inner := range declare(key.kind, key.Path) {
-		d.WriteString("#   " + inner.Key + ": " + inner.explanation() + "\n")
+		d.comment("#   ", inner.Key+": "+inner.explanation())
 	}
 }
 
+// A draft is as wide as a terminal; its explanations stand beside the keys.
+const (
+	draftWidth  = 80
+	draftColumn = 44
+)
+
+// line writes a key with what it means beside it, on as many lines as that takes.
 func (d *drafter) line(text, comment string, off bool) {
 	if off {
 		text = "#" + text
 	}
-	fmt.Fprintf(d, "%-44s # %s\n", text, comment)
+	if len(text) > draftColumn {
+		d.WriteString(text + "\n")
+		text = ""
+	}
+	for _, l := range wrapped(comment, draftWidth-draftColumn-len(" # ")) {
+		fmt.Fprintf(d, "%-*s # %s\n", draftColumn, text, l)
+		text = ""
+	}
+}
+
+// comment writes a comment of its own; its lines after the first stand further in.
+func (d *drafter) comment(begin, text string) {
+	for i, l := range wrapped(text, draftWidth-len(begin)-2) {
+		if i == 1 {
+			begin += "  "
+		}
+		d.WriteString(begin + l + "\n")
+	}
+}
+
+// wrapped breaks a text at its spaces.
+func wrapped(text string, width int) []string {
+	var lines []string
+	for _, word := range strings.Fields(text) {
+		last := len(lines) - 1
+		if last >= 0 && utf8.RuneCountInString(lines[last]+" "+word) <= width {
+			lines[last] += " " + word
+		} else {
+			lines = append(lines, word)
+		}
+	}
+	return lines
 }
 
 // explanation is what a comment says of a key.

@@ -83,23 +83,35 @@ func newGrid(w *writer, t exhibit.Table) *grid {
 const leastColumn = 8
 
 // fitted is the width of each column: what its longest text takes, the widest made
-// narrower until all fit, as long as it can be without words broken inside; nil where they
-// cannot.
+// narrower until all fit. Words stay whole as long as that can be; where even pieces of
+// words would have to be broken, or a text would stand as a column of single words, nil.
 func (g *grid) fitted() []int {
-	widths, whole := make([]int, len(g.heads)), make([]int, len(g.heads))
+	for _, piece := range []func(string) int{longestWord, longestPiece} {
+		if widths := g.narrowed(piece); widths != nil {
+			if g.thin(widths) {
+				return nil
+			}
+			return widths
+		}
+	}
+	return nil
+}
+
+// narrowed is the widths of columns that fit, none narrower than its longest piece; nil
+// where there are none.
+func (g *grid) narrowed(piece func(string) int) []int {
+	widths, least := make([]int, len(g.heads)), make([]int, len(g.heads))
 	sum := 2 + between*(len(widths)-1)
 	for i := range widths {
-		for _, row := range append(g.cells, g.heads) {
+		widths[i], least[i] = runes(g.heads[i]), max(leastColumn, piece(g.heads[i]))
+		for _, row := range g.cells {
 			widths[i] = max(widths[i], runes(row[i]))
-			whole[i] = max(whole[i], g.unbroken(i, row[i]))
+			least[i] = max(least[i], g.unbroken(i, row[i], piece))
 		}
 		sum += widths[i]
 	}
 	for ; sum > g.width; sum-- {
-		widest := widestAbove(widths, whole)
-		if widest < 0 {
-			widest = widestAbove(widths, nil)
-		}
+		widest := widestAbove(widths, least)
 		if widest < 0 {
 			return nil
 		}
@@ -110,22 +122,36 @@ func (g *grid) fitted() []int {
 
 // unbroken is how wide a cell must be for nothing in it to be broken inside: numbers stay
 // with their units.
-func (g *grid) unbroken(column int, text string) int {
-	if g.number[column] && !slices.Contains(g.heads, text) {
+func (g *grid) unbroken(column int, text string, piece func(string) int) int {
+	if g.number[column] {
 		return runes(text)
 	}
-	return longestPiece(text)
+	return piece(text)
 }
 
-// widestAbove is the widest column that may still be narrower, -1 for none.
+// A text is thin where it takes more lines than thinLines in a column narrower than
+// thinColumn.
+const (
+	thinLines  = 4
+	thinColumn = 20
+)
+
+func (g *grid) thin(widths []int) bool {
+	for _, row := range g.cells {
+		for i, c := range row {
+			if widths[i] < thinColumn && len(broken(c, widths[i])) > thinLines {
+				return true
+			}
+		}
+	}
+	return false
+}
+
+// widestAbove is the widest column that is still wider than it must be, -1 for none.
 func widestAbove(widths, least []int) int {
 	widest := -1
 	for i, w := range widths {
-		floor := leastColumn
-		if least != nil {
-			floor = max(floor, least[i])
-		}
-		if w > floor && (widest < 0 || w > widths[widest]) {
+		if w > least[i] && (widest < 0 || w > widths[widest]) {
 			widest = i
 		}
 	}
@@ -174,16 +200,4 @@ func (g *grid) padded(column int, s string) string {
 		return strings.Repeat(" ", g.widths[column]-runes(s)) + s
 	}
 	return pad(s, g.widths[column])
-}
-
-// list writes each row as lines of heading and text, where columns do not fit.
-func (g *grid) list() {
-	for _, row := range g.cells {
-		for i, c := range row {
-			if c != "" {
-				g.hang("  -", 4, g.heads[i]+": "+c)
-			}
-		}
-		g.blank()
-	}
 }

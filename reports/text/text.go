@@ -80,11 +80,20 @@ func beginning(w *writer, r *rules.Review, note string, most int) {
 	heading(w, r.Heading)
 	shown := r.Summary[:min(len(r.Summary), most)]
 	for _, l := range shown {
-		w.short(l.Label, gutter, l.Text, linesEach(len(r.Summary), 5))
+		w.told(l, linesEach(len(r.Summary), 5))
 	}
 	w.blank()
 	w.verdict(strings.ToUpper(string(r.Verdict)), r.Verdict, digest.Sentence(r))
 	w.short("", gutter, digest.Counts(r.Counts), 1)
+}
+
+// told is a line of the summary; only the screen that stands alone cuts it.
+func (w *writer) told(l rules.Line, most int) {
+	if w.all {
+		w.hang(l.Label, gutter, l.Text)
+		return
+	}
+	w.short(l.Label, gutter, l.Text, most)
 }
 
 // ending is what is missing, what comes before the review, and where to read on.

@@ -89,60 +89,18 @@ func (w *writer) verdict(word string, v rule.Verdict, s string) {
 	}
 }
 
-// fit shortens a text to a width and shows that it did.
+// fit shortens a text to a width, between two words if it has more than one, and shows
+// that it did.
 func (w *writer) fit(s string, width int) string {
 	s = digest.Clean(s)
 	if runes(s) <= width {
 		return s
 	}
-	return strings.TrimRight(string([]rune(s)[:width-1]), " ") + "…"
-}
-
-// broken breaks a text at its spaces, and inside a word only where the word is
-// longer than a line: after a stroke, a point or a hyphen if it has one.
-func broken(s string, width int) []string {
-	var lines []string
-	line := ""
-	for _, word := range strings.Fields(s) {
-		if line != "" && runes(line)+1+runes(word) <= width {
-			line += " " + word
-			continue
-		}
-		if line != "" {
-			lines = append(lines, line)
-		}
-		for runes(word) > width {
-			begin := string([]rune(word)[:width])
-			if i := strings.LastIndexAny(begin, separators); i >= 0 {
-				begin = begin[:i+1]
-			}
-			lines = append(lines, begin)
-			word = strings.TrimPrefix(word, begin)
-		}
-		line = word
+	begin := string([]rune(s)[:width-1])
+	if i := strings.LastIndexByte(begin, ' '); i > 0 && s[len(begin)] != ' ' {
+		begin = begin[:i]
 	}
-	if line == "" {
-		return lines
-	}
-	return append(lines, line)
-}
-
-// separators are where a long word may be broken.
-const separators = "/.-"
-
-// longestPiece is the width below which a text is broken inside what holds together.
-func longestPiece(s string) (most int) {
-	for _, word := range strings.Fields(s) {
-		for word != "" {
-			end := len(word)
-			if i := strings.IndexAny(word, separators); i >= 0 {
-				end = i + 1
-			}
-			most = max(most, runes(word[:end]))
-			word = word[end:]
-		}
-	}
-	return most
+	return strings.TrimRight(begin, " ") + "…"
 }
 
 func pad(s string, width int) string { return s + strings.Repeat(" ", max(0, width-runes(s))) }

@@ -90,11 +90,10 @@ func rows(w *lines.Writer, all []readings.Row) {
 
 // surplus names what a current above the computed one is.
 func surplus(r readings.Row) string {
-	more := quantity.Current(r.Read - r.Expected.Value)
-	if r.Expected.Unit != "A" || more <= 0 {
+	if r.Surplus <= 0 {
 		return ""
 	}
-	return fmt.Sprintf("; %s more than computed: leakage or corona, unless an error of reading", quantity.Text(more))
+	return fmt.Sprintf("; %s more than computed: leakage or corona, unless parts, drive or instrument are off", quantity.Text(quantity.Current(r.Surplus)))
 }
 
 func suspects(w *lines.Writer, c *readings.Comparison) {

@@ -7,15 +7,19 @@ import (
 
 // Opposing is what takes something from the drive and counts as none, since it is not given.
 func (e *Evidence) Opposing() []string {
-	keys := e.StraysNotGiven()
-	if !e.chain.Drive.Resistance.Set() {
-		keys = append(keys, e.chain.Drive.Resistance.Key)
-	}
 	var all []string
-	for _, key := range keys {
+	for _, key := range e.StraysNotGiven() {
 		all = append(all, "no "+key+": it is not given")
 	}
-	return all
+	return append(all, e.Unresisted()...)
+}
+
+// Unresisted says that the resistance of the drive counts as none, where it is not given.
+func (e *Evidence) Unresisted() []string {
+	if e.chain.Drive.Resistance.Set() {
+		return nil
+	}
+	return []string{"no " + e.chain.Drive.Resistance.Key + ": it is not given"}
 }
 
 // StraysNotGiven are the keys of the multiplier's strays that the description leaves out.

@@ -2,6 +2,7 @@ package fault
 
 import (
 	"fmt"
+	"slices"
 	"strings"
 
 	"kilovet/hv/chain"
@@ -84,7 +85,7 @@ func overVoltage(e *evidence.Evidence, f Fault, t *chain.VoltageTrip) Measure {
 }
 
 func overCurrent(e *evidence.Evidence, f Fault, t *chain.CurrentTrip) Measure {
-	m := Measure{Name: "over-current trip", Assumes: e.TripAssumptions()}
+	m := Measure{Name: "over-current trip", Assumes: append(slices.Clone(e.TripAssumptions()), e.Unresisted()...)}
 	senses := e.TripSenses()
 	switch {
 	case f.Part == "multiplier return" && senses == evidence.OfReturn:

@@ -61,7 +61,7 @@ func judgeComputed(e *evidence.Evidence) rule.Judgement {
 	if len(j.Findings) == 0 {
 		all.Because = fmt.Sprintf("%d single faults and errors of assembly were computed, each with the regulation's answer", len(outcomes))
 		all.Remedy = "take what a fault does to parts that it cuts off for an estimate"
-		j.Findings = []rule.Finding{all.There(true).Assume(taken(outcomes)...).WithoutRemedyIfMet()}
+		j.Findings = []rule.Finding{all.There(true).Assume(taken(outcomes)...).Assume(e.Opposing()...).WithoutRemedyIfMet()}
 	}
 	return j
 }

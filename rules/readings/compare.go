@@ -44,6 +44,9 @@ type Row struct {
 	Read             float64
 	Expected         plan.Band
 	Within           bool
+	// Surplus is by how much a current passes the computed one, where that is more than the
+	// reading of it is worth; zero else.
+	Surplus float64
 }
 
 // taken is one reading with where and how it was taken.
@@ -89,7 +92,10 @@ func compared(e *evidence.Evidence, p *plan.Plan, f *File, all []taken) *Compari
 	c := &Comparison{Planned: planned(p)}
 	c.Polarities, c.Sign = polarities(p, f)
 	for _, t := range all {
-		r := Row{t.step.Name, t.step.Readings[t.place].Instrument, t.read, t.expected, t.expected.Holds(t.read)}
+		r := Row{Step: t.step.Name, Instrument: t.step.Readings[t.place].Instrument, Read: t.read, Expected: t.expected, Within: t.expected.Holds(t.read)}
+		if more := t.read - t.expected.Value; t.expected.Unit == "A" && more > 2*readShare*t.expected.Value {
+			r.Surplus = more
+		}
 		c.Rows = append(c.Rows, r)
 	}
 	if len(all) > 0 {

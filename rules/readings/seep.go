@@ -4,6 +4,7 @@ import (
 	"fmt"
 	"math"
 	"slices"
+	"strings"
 
 	"kilovet/hv/circuit"
 	"kilovet/hv/parallel"
@@ -43,12 +44,12 @@ func (b *bench) seeps() []trial {
 }
 
 // live are the nodes that have a good part of the highest voltage: a tenth of that of the
-// output (common practice, no source).
+// output (common practice, no source). The leads of a heater are at its cathode.
 func (b *bench) live() (nodes []string) {
 	at := b.e.Under(b.highest().at)
 	output, err := at.Reads("output", "ground")
 	for _, node := range b.e.Nodes() {
-		if v, no := at.Reads(node, "ground"); err == nil && no == nil && v > output/10 {
+		if v, no := at.Reads(node, "ground"); err == nil && no == nil && v > output/10 && !strings.HasPrefix(node, "heater.") {
 			nodes = append(nodes, node)
 		}
 	}

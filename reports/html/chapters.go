@@ -29,8 +29,20 @@ type curve struct {
 // exhibited is a table of the review.
 type exhibited struct {
 	ID, Title, Note, Basis string
+	Folded                 string // what stands in its place until it is opened; empty where it is open
 	Columns                []column
 	Rows                   template.HTML
+}
+
+// mostRows is how many rows of a table are open from the beginning.
+const mostRows = 60
+
+// folded says what a table holds that is for whoever looks closely, or that is long.
+func folded(t exhibit.Table) string {
+	if !t.Detail && len(t.Rows) <= mostRows {
+		return ""
+	}
+	return fmt.Sprintf("%d rows, to be opened to be read or printed", len(t.Rows))
 }
 
 type column struct {
@@ -69,7 +81,7 @@ func titled(title, subject string) string {
 }
 
 func exhibitedOf(id string, t exhibit.Table) exhibited {
-	out := exhibited{ID: id, Title: titled(t.Title, t.Subject), Note: clean(t.Note), Basis: clean(t.Basis)}
+	out := exhibited{ID: id, Title: titled(t.Title, t.Subject), Note: clean(t.Note), Basis: clean(t.Basis), Folded: folded(t)}
 	for i, c := range t.Columns {
 		words := slices.ContainsFunc(t.Rows, func(row []exhibit.Cell) bool { return row[i].Value == nil && row[i].Text != "" })
 		out.Columns = append(out.Columns, column{clean(c.Head), c.Unit != "" && !words})

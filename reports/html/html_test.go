@@ -241,6 +241,28 @@ func TestChapters(t *testing.T) {
 	}
 }
 
+// A table for whoever looks closely, and a long one, is folded and says what it holds; its
+// place on paper says the same, and opened it is printed.
+func TestLongTablesAreFolded(t *testing.T) {
+	r := sample.Sound()
+	r.Tables = sample.Tables()[:1]
+	if got := render(t, r, html.Options{}); strings.Contains(got, `<details class="rows">`) {
+		t.Error("a short table is folded")
+	}
+	r.Tables[0].Detail = true
+	got := render(t, r, html.Options{})
+	if want := "<details class=\"rows\">\n<summary>24 rows, to be opened to be read or printed</summary>\n<div class=\"wide\""; !strings.Contains(got, want) {
+		t.Errorf("%q is missing", want)
+	}
+	r.Tables[0].Detail = false
+	for len(r.Tables[0].Rows) <= 60 {
+		r.Tables[0].Rows = append(r.Tables[0].Rows, r.Tables[0].Rows...)
+	}
+	if got := render(t, r, html.Options{}); !strings.Contains(got, "<summary>96 rows, ") || strings.Count(got, "multiplier.diode.7<") != 4 {
+		t.Error("a long table is not folded, or not whole")
+	}
+}
+
 func TestServedPageWatchesForChanges(t *testing.T) {
 	file, served := render(t, sample.Failing(), html.Options{}), render(t, sample.Failing(), html.Options{Version: "abc"})
 	if strings.Contains(file, "EventSource") || !strings.Contains(served, "EventSource") || !strings.Contains(served, `<meta name="version" content="abc">`) {

@@ -36,7 +36,7 @@ func SignOffOf(c *chain.Chain, r *Review, required []rule.Concern, read *reading
 	case read.Bent:
 		s.Against = append(s.Against, "every reading lies within its bounds, and yet they do not agree with each other: kilovet readings says what that points to")
 	default:
-		s.Against = append(s.Against, fmt.Sprintf("outside their bounds lie %d of %s: kilovet readings says which, and what that points to", astray(read), rule.Number(len(read.Rows), "reading", "readings")))
+		s.Against = append(s.Against, fmt.Sprintf("readings outside their bounds: %d of %d; kilovet readings says which, and what that points to", astray(read), len(read.Rows)))
 	}
 	return s
 }

@@ -32,8 +32,8 @@ func TestEveryNodeWithEveryPartOpen(t *testing.T) {
 		}
 	}
 	table := tableOf(t, r, "energy.one_open_worst")
-	if len(table.Rows) != 20 || len(worst) != 20 {
-		t.Errorf("%d rows and %d nodes, want those of 20 nodes", len(table.Rows), len(worst))
+	if _, there := worst["mains"]; len(table.Rows) != 19 || len(worst) != 19 || there {
+		t.Errorf("%d rows and %d nodes, want those of all 20 nodes but the mains, which does not discharge", len(table.Rows), len(worst))
 	}
 	for _, row := range table.Rows {
 		most := max(lastingOf(row[1]), lastingOf(row[2]), lastingOf(row[5]))

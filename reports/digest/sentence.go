@@ -57,11 +57,11 @@ func passed(r *rules.Review) string {
 func Marginal(f rule.Finding) string {
 	switch {
 	case f.Passes():
-		return "not met: the limit is passed, and the rule calls that marginal for the reason it gives"
+		return "not met: the limit is passed, and the rule calls that marginal; kilovet basis " + f.Rule + " says why"
 	case len(f.Assumptions) > 0 && (f.Margin == nil || quantity.AtLeast(1+*f.Margin, 1+f.Stated)):
-		return "met on an assumption"
+		return "met on an assumption: " + strings.Join(f.Assumptions, "; ")
 	case len(f.Assumptions) > 0:
-		return "met with less than the stated margin, and on an assumption"
+		return "met with less than the stated margin, and on an assumption: " + strings.Join(f.Assumptions, "; ")
 	case f.Margin == nil:
 		return "met with a reserve, for the reason beside"
 	}

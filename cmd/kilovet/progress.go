@@ -21,8 +21,9 @@ type progress struct {
 // quiet is how long nothing is told.
 const quiet = time.Second
 
+// progress is told nobody where a terminal cannot clear a line.
 func (w world) progress() *progress {
-	if !w.watched {
+	if !w.watched || w.env("TERM") == "dumb" {
 		return &progress{}
 	}
 	p := &progress{to: w.err, said: "working it out"}

@@ -32,10 +32,13 @@ func TestProgressIsToldOnceWorkLasts(t *testing.T) {
 		t.Errorf("%q, want %q", got, want+line)
 	}
 	out.Reset()
-	unseen := world{err: &out}.progress()
-	unseen.tell("single faults", 1, 3)
-	unseen.end()
-	if out.Len() > 0 {
-		t.Errorf("told nobody: %q", out.String())
+	dumb := func(string) string { return "dumb" }
+	for _, w := range []world{{err: &out}, {err: &out, watched: true, env: dumb}} {
+		unseen := w.progress()
+		unseen.tell("single faults", 1, 3)
+		unseen.end()
+		if unseen.to != nil || out.Len() > 0 {
+			t.Errorf("told nobody: %q", out.String())
+		}
 	}
 }

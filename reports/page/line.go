@@ -40,14 +40,18 @@ func lines(all ...Line) Cell {
 	return Cell{Lines: kept}
 }
 
-// shortened cuts a text for the first sheet and shows that it did; the whole of
-// it stands on a later one.
+// shortened cuts a text for the first sheet between two words, lest half a number be
+// taken for one, and shows that it did; the whole of it stands on a later one.
 func shortened(s string) string {
 	r := []rune(s)
 	if len(r) <= mostReason {
 		return s
 	}
-	return strings.TrimSpace(string(r[:mostReason-1])) + "…"
+	begin := string(r[:mostReason-1])
+	if i := strings.LastIndexByte(begin, ' '); i > 0 && r[mostReason-1] != ' ' {
+		begin = begin[:i]
+	}
+	return strings.TrimSpace(begin) + "…"
 }
 
 func count(n int, thing string) string {

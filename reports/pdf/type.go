@@ -3,6 +3,7 @@ package pdf
 import (
 	"slices"
 	"strings"
+	"unicode/utf8"
 
 	"kilovet/reports/page"
 )
@@ -140,18 +141,23 @@ func (f *fonts) joint(t style, s string, width float64) int {
 	return fits
 }
 
-// fit sets a text on at most so many lines and shows where it was cut.
+// fit sets a text on at most so many lines and shows where it was cut: between two words
+// where its last line has some.
 func (f *fonts) fit(t style, s string, width float64, most int) []set {
 	lines := f.wrap(t, s, width)
 	if len(lines) <= most {
 		return lines
 	}
 	lines = slices.Clone(lines[:most])
-	last := []rune(lines[most-1].text)
-	for len(last) > 0 && f.width(t, string(last)+"…") > width {
-		last = last[:len(last)-1]
+	last := lines[most-1].text
+	for last != "" && f.width(t, last+"…") > width {
+		_, size := utf8.DecodeLastRuneInString(last)
+		last = last[:len(last)-size]
+		if i := strings.LastIndexByte(last, ' '); i > 0 {
+			last = last[:i]
+		}
 	}
-	lines[most-1].text = string(last) + "…"
+	lines[most-1].text = last + "…"
 	return lines
 }
 

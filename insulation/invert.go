@@ -84,6 +84,9 @@ func RadiusForField(g gap.Gap, v quantity.Voltage, limit quantity.Field) (quanti
 	})
 }
 
+// WithGap is a gap with another clearance, its shape moved along, the sharpest radius kept.
+func WithGap(g gap.Gap, d quantity.Length) gap.Gap { return withGap(g, d) }
+
 // withGap is the gap with another clearance, its shape moved along.
 func withGap(g gap.Gap, d quantity.Length) gap.Gap {
 	g.Clearance = d

@@ -42,6 +42,7 @@ type Hole struct {
 type Sleeve struct {
 	document.Table
 	Material        document.Given[string]               `key:"material" needed:"yes" means:"what it is made of" example:"alumina"`
+	CTI             document.Given[quantity.Voltage]     `key:"cti" range:">= 0 V, <= 1000 V" means:"comparative tracking index of a material that is not known here" example:"600 V"`
 	InnerRadius     document.Given[quantity.Length]      `key:"inner_radius" range:"> 0 mm, <= 1 m" means:"radius of the bore (default: that of the pin)" example:"3.2 mm"`
 	OuterRadius     document.Given[quantity.Length]      `key:"outer_radius" range:"> 0 mm, <= 1 m" means:"outer radius (default: that of the hole)" example:"12 mm"`
 	InnerGap        document.Given[string]               `key:"inner_gap" words:"air | vacuum" means:"what fills the annulus between pin and sleeve" example:"vacuum"`

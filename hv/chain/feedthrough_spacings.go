@@ -48,7 +48,7 @@ func (f *Feedthrough) spacing(part, medium string) Spacing {
 		s.To = at(f.Node, f.To.Or("ground"))
 	}
 	if f.Sleeve != nil {
-		s.Material = f.Sleeve.Material
+		s.Material, s.CTI = f.Sleeve.Material, f.Sleeve.CTI
 	}
 	return s
 }

@@ -17,6 +17,28 @@ func (x Spacing) GapFor(v quantity.Voltage) (quantity.Length, error) {
 	return insulation.ClearanceForBreakdown(x.Gap, v, x.Voltages.Sharp)
 }
 
+// Across is the spacing without the surface that bridges it in vacuum, which has a size of
+// its own.
+func (x Spacing) Across() Spacing {
+	if x.Gap.Medium == gap.Vacuum {
+		x.Gap.Creepage = 0
+	}
+	return x
+}
+
+// StandsFrom is a distance, or the least of longer ones that are tried, at which a law answers
+// that the spacing stands a voltage.
+func (x Spacing) StandsFrom(d quantity.Length, v quantity.Voltage) (quantity.Length, error) {
+	const ratio, most = 1.02, 30.0
+	x = x.Across()
+	for at := d; at < most*d; at *= ratio {
+		if a, err := insulation.Breakdown(insulation.WithGap(x.Gap, at), x.Voltages.Sharp); err == nil && quantity.AtLeast(a.Value, v) {
+			return at, nil
+		}
+	}
+	return 0, lack.Failed("no distance is known to stand %s", quantity.Text(v))
+}
+
 // RadiusFor is the sharpest radius at which it breaks down at a voltage, the distance kept.
 func (x Spacing) RadiusFor(v quantity.Voltage) (quantity.Length, error) {
 	return insulation.RadiusForBreakdown(x.Gap, v, x.Voltages.Sharp)
@@ -28,9 +50,21 @@ func (x Spacing) AtWork() (gap.Answer[quantity.Voltage], error) {
 	return insulation.WorkingAtMost(x.Gap)
 }
 
-// RadiusAtWork is the sharpest radius with which the distance bears a peak.
-func (x Spacing) RadiusAtWork(v quantity.Voltage) (quantity.Length, error) {
-	return insulation.RadiusForWork(x.Gap, v)
+// HasWork reports whether a working stress, which a radius can be too sharp for, asks for
+// the distance.
+func (x Spacing) HasWork() bool {
+	return x.Gap.Medium == gap.Vacuum || x.Gap.Medium == gap.Oil || x.Gap.Medium == gap.Solid
+}
+
+// RadiusAtWork is the sharpest radius with which a share of the distance bears a peak.
+func (x Spacing) RadiusAtWork(v quantity.Voltage, share float64) (quantity.Length, error) {
+	return insulation.RadiusForWork(insulation.WithGap(x.Gap, x.Gap.Clearance*quantity.Length(share)), v)
+}
+
+// BearsAtWork reports whether a share of the distance bears a peak at work.
+func (x Spacing) BearsAtWork(v quantity.Voltage, share float64) bool {
+	a, err := insulation.WorkingVoltage(insulation.WithGap(x.Gap, x.Gap.Clearance*quantity.Length(share)))
+	return err == nil && quantity.AtLeast(a.Value, v)
 }
 
 // Dimensioned is the peak that the class of insulation is dimensioned for.

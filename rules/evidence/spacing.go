@@ -15,7 +15,8 @@ type Spacing struct {
 	Lasting    Condition // where the lasting voltage is highest
 	Gap        gap.Gap
 	Assessment insulation.Assessment
-	Computed   bool // a computed field judges in place of the closed shape
+	Computed   bool  // a computed field judges in place of the closed shape
+	Wall       *Wall // of the sleeve of a feedthrough: what it takes of the voltage; else nil
 }
 
 // Spacings are the described spacings and those of the feedthroughs.
@@ -59,8 +60,12 @@ func (e *Evidence) Spacing(s *chain.Spacing) (Spacing, error) {
 		if err != nil {
 			return Spacing{}, err
 		}
+		v, wall, err := e.onWall(s, v)
+		if err != nil {
+			return Spacing{}, err
+		}
 		g := e.gap(s)
-		x := Spacing{v, under, lasting, g, insulation.Assess(g, v), false}
+		x := Spacing{v, under, lasting, g, insulation.Assess(g, v), false, wall}
 		e.byField(s, &x)
 		return x, nil
 	})
@@ -72,16 +77,27 @@ func (e *Evidence) spacingInFault(s *chain.Spacing) (Spacing, error) {
 		return usual, err
 	}
 	peak, err := Largest(e, e.Ratings(), nodesOf(s), func(e *Evidence, n string) (quantity.Voltage, error) { return e.peakOver(n, s.To.V) })
-	if err != nil || quantity.AtMost(peak.Value, usual.Voltages.Peak) {
+	if err != nil || quantity.AtMost(peak.Value, usual.Whole()) {
 		return usual, err
 	}
 	return remember(e, "spacing "+s.Name.V, func() (Spacing, error) {
-		v := usual.Voltages
-		v.Peak = peak.Value
-		x := Spacing{v, peak.Under, usual.Lasting, usual.Gap, insulation.Assess(usual.Gap, v), false}
+		v, wall := usual.Voltages, (*Wall)(nil)
+		if v.Peak = peak.Value; usual.Wall != nil {
+			w := e.Healthy().wall(s.Of, v.Peak, min(v.Peak, usual.Whole()))
+			v.Peak, wall = w.Of(v.Peak), &w
+		}
+		x := Spacing{v, peak.Under, usual.Lasting, usual.Gap, insulation.Assess(usual.Gap, v), false, wall}
 		e.Healthy().byField(s, &x) // its field is that of the same line, for each volt
 		return x, nil
 	})
+}
+
+// Whole is the peak between the ends of a spacing, of which it may take a part only.
+func (x Spacing) Whole() quantity.Voltage {
+	if x.Wall != nil {
+		return x.Wall.Whole
+	}
+	return x.Voltages.Peak
 }
 
 // nodesOf are the nodes on the live side of a spacing.

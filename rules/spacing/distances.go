@@ -89,7 +89,7 @@ func distance(e *evidence.Evidence, s *chain.Spacing, id string, given document.
 	}
 	need := needed(x)
 	if need.Lack != nil {
-		return unneeded(f, s, x, given, need.Lack)
+		return unneeded(e, f, s, x, given, need.Lack)
 	}
 	f.Under = x.Under.Text()
 	if id == "spacing.creepage" {
@@ -108,13 +108,18 @@ func distance(e *evidence.Evidence, s *chain.Spacing, id string, given document.
 		return f.Lacking(err)
 	}
 	f.Because += taken
+	f = shareOf(f, x)
 	f = f.Least(rule.Of(counted), rule.Of(need.Value), limits.DistanceMargin).Assume(need.Assumptions...).Assume(classTaken(s)...)
 	switch {
 	case f.Verdict == rule.Meets:
 	case assumedOnly(f, limits.DistanceMargin):
 		f.Remedy = confirm
 	default:
-		f.Remedy = alternatives(wider(s, given, need.Value+given.V-counted), lowered(id, x), "lower the voltage")
+		way := wider(s, given, need.Value+given.V-counted)
+		if id == "spacing.clearance" {
+			way = clearanceFor(e, s, x, way)
+		}
+		f.Remedy = alternatives(way, lowered(id, x), "lower the voltage")
 	}
 	return f
 }
@@ -131,18 +136,18 @@ func countedOf(id string, x evidence.Spacing, given quantity.Length) (counted qu
 }
 
 // unneeded is the finding where no distance that is needed is known.
-func unneeded(f rule.Finding, s *chain.Spacing, x evidence.Spacing, given document.Given[quantity.Length], why *lack.Lack) rule.Finding {
+func unneeded(e *evidence.Evidence, f rule.Finding, s *chain.Spacing, x evidence.Spacing, given document.Given[quantity.Length], why *lack.Lack) rule.Finding {
 	switch {
 	case f.Rule == "spacing.creepage" && untested(why):
 		return bounded(f, s, x, why)
 	case f.Rule == "spacing.clearance" && tooSharp(s, x):
-		return neverEnough(f, x, why)
+		return neverEnough(e, f, s, x, why)
 	case inAir(s) && given.Set() && why.Kind == lack.Outside:
 		return pastTables(f, s, x, given, why)
 	}
 	f = f.Lacking(why)
 	if given.Set() && why.Kind != lack.Missing {
-		f.Remedy = alternatives(rounded(s, x, x.Voltages.Peak/quantity.Voltage(evidence.WorkingShare(x.Gap))), f.Remedy)
+		f.Remedy = alternatives(againstWork(s, x), f.Remedy)
 	}
 	return f
 }

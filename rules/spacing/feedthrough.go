@@ -1,7 +1,9 @@
 package spacing
 
 import (
+	"cmp"
 	"fmt"
+	"math"
 	"slices"
 	"strings"
 
@@ -82,33 +84,55 @@ func WeakestAgain(c *chain.Chain, findings []rule.Finding) []rule.Finding {
 
 func judgeWeakest(f *chain.Feedthrough, all []rule.Finding) rule.Finding {
 	x := rule.Finding{Rule: "feedthrough.weakest", Subject: f.Name.V, Concern: concernOf(f), Relation: rule.Presence, Place: f.Here()}
-	var worst *rule.Finding
-	n := 0
-	for i := range all {
-		if !strings.HasPrefix(all[i].Subject, f.Name.V+": ") {
-			continue
-		}
-		n++
-		if worst == nil || weaker(all[i], *worst) {
-			worst = &all[i]
-		}
-	}
-	if worst == nil {
+	of := slices.Clone(all)
+	of = slices.DeleteFunc(of, func(p rule.Finding) bool { return !strings.HasPrefix(p.Subject, f.Name.V+": ") })
+	if len(of) == 0 {
 		return x.Lacking(lack.Because("nothing of it can be judged"))
 	}
+	slices.SortStableFunc(of, graver)
+	worst := of[0]
 	x.Verdict, x.Under, x.Place, x.Remedy, x.Missing, x.Assumptions = worst.Verdict, worst.Under, worst.Place, worst.Remedy, worst.Missing, worst.Assumptions
 	x.Sources = worst.Sources
-	part := strings.TrimPrefix(worst.Subject, f.Name.V+": ")
-	x.Because = fmt.Sprintf("of %s about it the weakest is %s of its %s%s: %s", rule.Number(n, "finding", "findings"), strings.TrimPrefix(strings.TrimPrefix(worst.Rule, "spacing."), "feedthrough."), part, inHand(*worst), worst.Because)
+	part := strings.TrimPrefix(strings.TrimPrefix(worst.Rule, "spacing."), "feedthrough.") + " of its " + strings.TrimPrefix(worst.Subject, f.Name.V+": ")
+	open := 0
+	for _, p := range of {
+		if p.Verdict == rule.Unassessed {
+			open++
+		}
+	}
+	count := rule.Number(len(of), "finding", "findings")
+	switch {
+	case worst.Verdict == rule.Unassessed:
+		x.Because = fmt.Sprintf("of %s about it %d cannot be judged and may be the weakest, first %s: %s", count, open, part, worst.Because)
+	case open > 0:
+		x.Because = fmt.Sprintf("of %s about it the weakest that can be judged is %s%s, %d more cannot: %s", count, part, inHand(worst), open, worst.Because)
+	default:
+		x.Because = fmt.Sprintf("of %s about it the weakest is %s%s: %s", count, part, inHand(worst), worst.Because)
+	}
 	return x
 }
 
-// weaker reports whether a finding is graver than another, or as grave with less in hand.
-func weaker(a, b rule.Finding) bool {
-	if a.Verdict != b.Verdict {
-		return rule.Graver(a.Verdict, b.Verdict)
+// graver puts the graver finding first, of two that are as grave the one with less in hand:
+// one that fails outright has least of all, one that passes outright most.
+func graver(a, b rule.Finding) int {
+	switch {
+	case rule.Graver(a.Verdict, b.Verdict):
+		return -1
+	case rule.Graver(b.Verdict, a.Verdict):
+		return 1
 	}
-	return a.Margin != nil && (b.Margin == nil || *a.Margin < *b.Margin)
+	return cmp.Compare(hand(a), hand(b))
+}
+
+// hand is the margin of a finding, that of one without as a pass or a fail has it.
+func hand(f rule.Finding) float64 {
+	switch {
+	case f.Margin != nil:
+		return *f.Margin
+	case f.Verdict == rule.Fails:
+		return math.Inf(-1)
+	}
+	return math.Inf(1)
 }
 
 // inHand is the margin of a finding in words.

@@ -33,11 +33,10 @@ func assumedOnly(f rule.Finding, margin float64) bool {
 	return f.Verdict == rule.Marginal && f.Margin != nil && quantity.AtLeast(1+*f.Margin, 1+margin) && len(f.Assumptions) > 0
 }
 
-// rounded is the sharpest radius with which a spacing stands a voltage at its distance,
-// where that is more than the one it has.
-func rounded(s *chain.Spacing, x evidence.Spacing, v quantity.Voltage) string {
-	r, err := x.RadiusFor(v)
-	if err != nil || x.Gap.Shape == nil || quantity.AtMost(r, x.Gap.Shape.Sharpest()) {
+// rounded says to which radius the sharper electrode of a spacing must go, its distance
+// kept, where that is more than it has.
+func rounded(s *chain.Spacing, x evidence.Spacing, r quantity.Length) string {
+	if x.Gap.Shape == nil || quantity.AtMost(r, x.Gap.Shape.Sharpest()) {
 		return ""
 	}
 	if f := s.Of; f != nil && f.Sleeve != nil && s.Medium.V == "solid" {
@@ -76,27 +75,6 @@ func upward(l quantity.Length) quantity.Length {
 // wider is what makes a distance meet, its comfort included.
 func wider(s *chain.Spacing, given document.Given[quantity.Length], need quantity.Length) string {
 	return resized(s, given, need*(1+limits.DistanceMargin))
-}
-
-// againstBreakdown are the sizes at which the peak is the comfortable share of what a
-// spacing stands: a distance, a length of surface, a radius.
-func againstBreakdown(s *chain.Spacing, x evidence.Spacing) string {
-	v := x.Asked() / limits.BreakdownComfort
-	var ways []string
-	if s.Clearance.Set() {
-		if d, err := x.GapFor(v); err == nil {
-			ways = append(ways, resized(s, s.Clearance, d))
-		}
-	}
-	if s.Creepage.Set() {
-		if l, err := x.SurfaceFor(v); err == nil {
-			ways = append(ways, resized(s, s.Creepage, l))
-		}
-	}
-	if alternatives(ways...) == "" {
-		ways = append(ways, rounded(s, x, v))
-	}
-	return alternatives(append(ways, sided(s, x), medium(x), "lower the voltage")...)
 }
 
 // sided is what it would change to say that the sharper electrode is the negative one.
@@ -150,7 +128,7 @@ func keysOf(s *chain.Spacing) *strings.Replacer {
 	case chain.SleeveWall:
 		side = "feedthrough.sleeve"
 	}
-	return strings.NewReplacer("spacing.material, spacing.cti", material+".material", "spacing.material", material+".material", "spacing.cti", "feedthrough.strip.cti",
+	return strings.NewReplacer("spacing.material, spacing.cti", material+".material", "spacing.material", material+".material", "spacing.cti", material+".cti",
 		"spacing.strength", "feedthrough.sleeve.strength", "spacing.shape", side+".shape", "spacing.", side+".")
 }
 

@@ -22,7 +22,7 @@ func tooSharp(s *chain.Spacing, x evidence.Spacing) bool {
 
 // neverEnough is the finding where no clearance is enough: it fails by what is there, and
 // only a larger radius helps.
-func neverEnough(f rule.Finding, x evidence.Spacing, why *lack.Lack) rule.Finding {
+func neverEnough(e *evidence.Evidence, f rule.Finding, s *chain.Spacing, x evidence.Spacing, why *lack.Lack) rule.Finding {
 	a, err := x.AtWork()
 	if err != nil {
 		return f.Lacking(why)
@@ -30,11 +30,11 @@ func neverEnough(f rule.Finding, x evidence.Spacing, why *lack.Lack) rule.Findin
 	f.Under = x.Under.Text()
 	f.Because = fmt.Sprintf("%s peak, where electrodes of this shape bear %s over %s (%s); %s", quantity.Text(x.Dimensioned()), quantity.Text(a.Value), quantity.Text(x.Gap.Clearance), a.Because, why.Error())
 	f.Sources = rule.Cited(a.Sources)
-	f = f.There(false)
-	round := ""
-	if r, err := x.RadiusAtWork(x.Dimensioned()); err == nil {
-		round = "round the sharper electrode to " + quantity.Text(upward(r))
+	f = shareOf(f, x).There(false)
+	size := againstBoth(e, s, x)
+	if size == "" {
+		size = conflict(s, x)
 	}
-	f.Remedy = alternatives(round, "lower the voltage")
+	f.Remedy = alternatives(size, "keep the peak under "+quantity.Text(x.Whole()*a.Value/x.Dimensioned()))
 	return f
 }

@@ -51,7 +51,7 @@ func judgeBreakdown(e *evidence.Evidence, s *chain.Spacing) rule.Finding {
 	}
 	stands := x.Assessment.Breakdown
 	if stands.Lack != nil || beyondBound(x) {
-		return classed(s, x, unanswered(f, s, x))
+		return classed(s, x, unanswered(e, f, s, x))
 	}
 	f.Under = x.Under.Text()
 	f.Sources = append(append(rule.Cited(stands.Sources), breakdownSource), shown(stands.Answer)...)
@@ -63,7 +63,7 @@ func judgeBreakdown(e *evidence.Evidence, s *chain.Spacing) rule.Finding {
 	remarks, cited := x.Remarks()
 	f.Because = strings.Join(append([]string{f.Because}, remarks...), "; ")
 	f.Sources = append(f.Sources, rule.Cited(cited)...)
-	f = classed(s, x, f)
+	f = shareOf(classed(s, x, f), x)
 	limit := stands.Value * usable(x)
 	f = f.ShareOf(rule.Of(stands.Value)).Most(rule.Of(x.Voltages.Peak), rule.Of(limit), limits.BreakdownShare/limits.BreakdownComfort-1).Assume(stands.Assumptions...).Assume(needlesTaken(s, x)...).Assume(beyond(e, s, x)...)
 	switch {
@@ -71,7 +71,7 @@ func judgeBreakdown(e *evidence.Evidence, s *chain.Spacing) rule.Finding {
 	case assumedOnly(f, limits.BreakdownShare/limits.BreakdownComfort-1):
 		f.Remedy = confirm
 	default:
-		f.Remedy = againstBreakdown(s, x)
+		f.Remedy = againstBreakdown(e, s, x)
 	}
 	return f
 }

@@ -20,7 +20,7 @@ func beyondBound(x evidence.Spacing) bool {
 
 // unanswered judges a gap whose breakdown no law gives at its distance by its bounds: it
 // holds under the lower, fails above the upper and is unassessed between.
-func unanswered(f rule.Finding, s *chain.Spacing, x evidence.Spacing) rule.Finding {
+func unanswered(e *evidence.Evidence, f rule.Finding, s *chain.Spacing, x evidence.Spacing) rule.Finding {
 	why := x.Assessment.Breakdown.Lack
 	if why == nil {
 		why = lack.Failed("only a lower bound of the breakdown is known")
@@ -32,6 +32,7 @@ func unanswered(f rule.Finding, s *chain.Spacing, x evidence.Spacing) rule.Findi
 	stands := func(at quantity.Voltage, how, because string, comfort float64) rule.Finding {
 		f.Under = x.Under.Text()
 		f.Because = fmt.Sprintf("%s across a gap that stands at %s %s (%s)", quantity.Text(v), how, quantity.Text(at), because)
+		f = shareOf(f, x)
 		return f.ShareOf(rule.Of(at)).Most(rule.Of(v), rule.Of(at*usable(x)), comfort)
 	}
 	switch {
@@ -45,7 +46,7 @@ func unanswered(f rule.Finding, s *chain.Spacing, x evidence.Spacing) rule.Findi
 	case b.Most.Lack == nil && !quantity.AtMost(v, b.Most.Value*usable(x)):
 		f.Sources = append(rule.Cited(b.Most.Sources), breakdownSource)
 		f = stands(b.Most.Value, "most", b.Most.Because, 0)
-		f.Remedy = "widen the gap or take a stronger medium, or lower the voltage"
+		f.Remedy = alternatives(againstBreakdown(e, s, x), "take a stronger medium")
 		return f
 	}
 	f.Because = within(v, b)

@@ -46,15 +46,23 @@ func (e *Evidence) Answers(f *build.Arrangement) ([]Answer, error) {
 		if weak.Field == nil || !(weak.Strength > 0) {
 			return nil, lack.Failed("no weakest point is known")
 		}
-		asked, err := e.demanded(f, weak.Stress, weak.Where)
-		if err != nil {
-			return nil, err
-		}
-		list := nearest(f.Dimensions, weak.At)
-		all := make([]Answer, len(list))
-		parallel.Each(len(list), func(i int) { all[i] = e.answer(f, list[i], weak, asked) })
-		return all, nil
+		return answersFor(f, weak, e.demanded)
 	})
+}
+
+// demand is a field over what a rule allows there.
+type demand func(*build.Arrangement, Stress, Where) (float64, error)
+
+// answersFor are those of all dimensions for a place and what is asked of it.
+func answersFor(f *build.Arrangement, weak Weak, of demand) ([]Answer, error) {
+	asked, err := of(f, weak.Stress, weak.Where)
+	if err != nil {
+		return nil, err
+	}
+	list := nearest(f.Dimensions, weak.At)
+	all := make([]Answer, len(list))
+	parallel.Each(len(list), func(i int) { all[i] = answer(list[i], weak, asked, of) })
+	return all, nil
 }
 
 // nearest leaves out the dimensions of a described arrangement that lie farthest from
@@ -86,13 +94,13 @@ type tried struct {
 	demand   float64 // of what is allowed
 }
 
-func (e *Evidence) answer(f *build.Arrangement, d build.Dimension, weak Weak, asked float64) Answer {
+func answer(d build.Dimension, weak Weak, asked float64, of demand) Answer {
 	a := Answer{Dimension: d}
 	v := d.Value * littleStep
-	t, err := e.try(d, v, weak, (*field.Solution).Moved, field.Fine)
+	t, err := try(d, v, weak, (*field.Solution).Moved, field.Fine, of)
 	if err != nil {
 		v = d.Value / littleStep
-		if t, err = e.try(d, v, weak, (*field.Solution).Moved, field.Fine); err != nil {
+		if t, err = try(d, v, weak, (*field.Solution).Moved, field.Fine, of); err != nil {
 			a.Err = err
 			return a
 		}
@@ -106,13 +114,13 @@ func (e *Evidence) answer(f *build.Arrangement, d build.Dimension, weak Weak, as
 	case math.Abs(power) < leastPower:
 		a.Err = lack.Failed("it changes too little")
 	default:
-		a.Needed, a.Err = e.search(d, weak, asked, power)
+		a.Needed, a.Err = search(d, weak, asked, power, of)
 	}
 	return a
 }
 
 // search goes by the power law and corrects it by what the solutions give.
-func (e *Evidence) search(d build.Dimension, weak Weak, asked, power float64) (quantity.Length, error) {
+func search(d build.Dimension, weak Weak, asked, power float64, of demand) (quantity.Length, error) {
 	last, demand := float64(d.Value), asked
 	for range mostTries {
 		aim := math.Sqrt(justMet) // between what serves and what is allowed
@@ -120,7 +128,7 @@ func (e *Evidence) search(d build.Dimension, weak Weak, asked, power float64) (q
 		if !(next < resizedMost*float64(d.Value) && next > float64(d.Value)/resizedMost) {
 			return 0, lack.Range("not even a fourth or four times as much is enough")
 		}
-		t, err := e.try(d, quantity.Length(next), weak, (*field.Solution).MovedFar, field.Rough)
+		t, err := try(d, quantity.Length(next), weak, (*field.Solution).MovedFar, field.Rough, of)
 		if err != nil {
 			return 0, err
 		}
@@ -139,7 +147,7 @@ func (e *Evidence) search(d build.Dimension, weak Weak, asked, power float64) (q
 type mover func(*field.Solution, field.Arrangement, field.Aim) (*field.Solution, error)
 
 // try solves an arrangement with another dimension under the same voltages.
-func (e *Evidence) try(d build.Dimension, v quantity.Length, weak Weak, by mover, aim field.Aim) (tried, error) {
+func try(d build.Dimension, v quantity.Length, weak Weak, by mover, aim field.Aim, of demand) (tried, error) {
 	f := d.With(v)
 	s, err := solveBy(f, func(a field.Arrangement) (*field.Solution, error) { return by(weak.Field.Solution, a, aim) })
 	if err != nil {
@@ -154,8 +162,8 @@ func (e *Evidence) try(d build.Dimension, v quantity.Length, weak Weak, by mover
 		return tried{}, err
 	}
 	stress := Stress{Peak: p, Field: at, Under: weak.Under, Settled: weak.Settled, potentials: weak.potentials}
-	demand, err := e.demanded(f, stress, weak.Where)
-	return tried{p.Strength, demand}, err
+	asked, err := of(f, stress, weak.Where)
+	return tried{p.Strength, asked}, err
 }
 
 // demanded is a field over what its rule allows there.

@@ -2,6 +2,7 @@ package fields
 
 import (
 	"fmt"
+	"strings"
 
 	"kilovet/hv/quantity"
 	"kilovet/insulation/field"
@@ -39,17 +40,77 @@ var breakdown = rule.Rule{
 }
 
 func judgeBreakdowns(e *evidence.Evidence, f *build.Arrangement, s *field.Solution, start rule.Finding) (all []rule.Finding) {
+	least, where := -1, evidence.Where{}
 	for _, name := range s.Electrodes() {
 		for _, body := range facing(f, s, name) {
 			one := start
 			one.Subject = subject(f, name, body)
 			w := e.ClearOfEdges(f, evidence.Where{Electrode: name, Body: body})
-			if j, judged := judgeBreakdown(e, f, w, one); judged {
-				all = append(all, j)
+			j, judged := judgeBreakdown(e, f, w, one)
+			if !judged {
+				continue
+			}
+			all = append(all, j)
+			if short(j) && (least < 0 || *j.Margin < *all[least].Margin) {
+				least, where = len(all)-1, w
 			}
 		}
 	}
+	for i := range all {
+		switch {
+		case i == least:
+			all[i].Remedy = oneDimension(e, f, where, all[i].Verdict == rule.Fails)
+		case short(all[i]):
+			all[i].Remedy = fmt.Sprintf("see to %s first, of which less is in hand; %s", all[least].Subject, all[i].Remedy)
+		}
+	}
 	return all
+}
+
+// short reports whether a voltage is above its comfort, and not only what is taken for
+// granted keeps it from being met.
+func short(f rule.Finding) bool {
+	return f.Margin != nil && !quantity.AtLeast(1+*f.Margin, 1+f.Stated)
+}
+
+// mostNamed is how many dimensions a remedy names.
+const mostNamed = 3
+
+// oneDimension names the least changes of one dimension with which the voltage is the
+// comfortable share of the breakdown, else those with which it is the share that may be used,
+// or why there is none.
+func oneDimension(e *evidence.Evidence, f *build.Arrangement, w evidence.Where, fails bool) string {
+	const lower = ", or lower the voltage"
+	enough, not, err := namedDimensions(e, f, w, limits.BreakdownComfort)
+	if enough == "" && fails && err == nil && not != "" {
+		if least, _, _ := namedDimensions(e, f, w, limits.BreakdownShare); least != "" {
+			return "one of these is just enough, none for comfort: " + least + lower
+		}
+	}
+	switch {
+	case enough != "":
+		return "one of these is enough: " + enough + lower
+	case err != nil:
+		return "widen the gap or round its electrodes, by how much was not found: " + err.Error() + lower
+	case not != "":
+		return "no one dimension is enough, change several (" + not + ")" + lower
+	}
+	return "widen the gap or round its electrodes; its outline has no dimension that could be changed alone" + lower
+}
+
+// namedDimensions are the least changes of which each alone is enough, and why others are
+// not.
+func namedDimensions(e *evidence.Evidence, f *build.Arrangement, w evidence.Where, share quantity.Fraction) (enough, not string, err error) {
+	answers, err := e.BreakdownAnswers(f, w, share)
+	var are, no []string
+	for _, a := range answers {
+		if text := a.Text(); text == "" {
+			no = append(no, a.Name+": "+a.Err.Error())
+		} else if len(are) < mostNamed {
+			are = append(are, text)
+		}
+	}
+	return strings.Join(are, ", or "), strings.Join(no, "; "), err
 }
 
 // judgeBreakdown judges one critical line; none that an insulator closes, and none of

@@ -56,3 +56,30 @@ func TestASurfaceThatJoinsElectrodesIsAskedFor(t *testing.T) {
 		}
 	}
 }
+
+// Two insulators one on the other join the electrodes that each alone does not, the same
+// material or not; with a gap between them they do not.
+func TestStackedInsulatorsJoinElectrodes(t *testing.T) {
+	const cap = `[[field.dielectrics]]
+name = "cap"
+permittivity = %s
+resistivity = "1e12 ohm m"
+material = "PTFE"
+profile = [{ from = ["0 mm", "%[2]s"] }, { to = ["12 mm", "%[2]s"] }, { to = ["12 mm", "40 mm"] }, { to = ["0 mm", "40 mm"] }, { to = ["0 mm", "%[2]s"] }]
+`
+	for _, c := range []struct {
+		permittivity, foot string
+		asked              bool
+	}{{"2.1", "25 mm", true}, {"9.4", "25 mm", true}, {"2.1", "28 mm", false}} {
+		text := fmt.Sprintf(post, `voltage = "0 V"`, "25 mm") + fmt.Sprintf(cap, c.permittivity, c.foot)
+		asked := ""
+		for _, f := range reviewed(t, []byte(text)).Findings {
+			if f.Rule == "field.surface" {
+				asked += f.Subject
+			}
+		}
+		if want := map[bool]string{true: "post/ceramic and cap"}[c.asked]; asked != want {
+			t.Errorf("%v: asked for %q, want %q", c, asked, want)
+		}
+	}
+}

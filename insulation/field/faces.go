@@ -91,3 +91,26 @@ func (s *Solution) Bare() (list []string) {
 	}
 	return list
 }
+
+// Joined are the dielectrics with a free surface to the medium that share an interface with
+// one, itself among them.
+func (s *Solution) Joined(dielectric string) (list []string) {
+	k, err := s.body(dielectric)
+	if err != nil {
+		return nil
+	}
+	bare := s.Bare()
+	for i, d := range s.Dielectrics {
+		touches := func(w wall) bool {
+			if w.kind != interfaces {
+				return false
+			}
+			a, b := s.regions[w.left].material, s.regions[w.right].material
+			return a == k && b == i+1 || a == i+1 && b == k
+		}
+		if slices.Contains(bare, d.Name) && (i+1 == k || slices.ContainsFunc(s.walls, touches)) {
+			list = append(list, d.Name)
+		}
+	}
+	return list
+}

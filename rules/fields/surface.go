@@ -3,6 +3,7 @@ package fields
 import (
 	"fmt"
 	"slices"
+	"strings"
 
 	"kilovet/hv/chain"
 	"kilovet/hv/lack"
@@ -16,7 +17,7 @@ var surfaceSource = rule.Source{Text: "an insulator between electrodes lowers wh
 
 var surface = rule.Rule{
 	ID: "field.surface", Title: "Surfaces that join electrodes",
-	Demands: "The free surface of an insulator that joins electrodes at different potential is judged: by a [[spacing]] with this field that gives its creepage.",
+	Demands: "The free surface of an insulator, or of several that touch one another, that joins electrodes at different potential is judged: by a [[spacing]] with this field that gives its creepage.",
 	Applies: "Every described field with such an insulator.",
 	Concern: rule.Equipment,
 	Sources: []rule.Source{surfaceSource},
@@ -52,18 +53,38 @@ func judgeSurfaces(e *evidence.Evidence, f *build.Arrangement, s *field.Solution
 	if f.From != "" || judgedAlong(e, f) {
 		return nil
 	}
-	for _, body := range s.Bare() {
-		if evidence.Open(f, body) {
-			continue
-		}
-		if a, b, joined := joins(f, s, body); joined {
+	for _, stack := range stacks(f, s) {
+		if a, b, joined := joins(f, s, stack); joined {
 			one := start
-			one.Subject, one.Sources = f.Name.V+"/"+body, []rule.Source{surfaceSource}
-			why := fmt.Sprintf("the surface of %s joins %s and %s, and no spacing with this field gives its creepage", body, a, b)
+			names := strings.Join(stack, " and ")
+			one.Subject, one.Sources = f.Name.V+"/"+names, []rule.Source{surfaceSource}
+			why := fmt.Sprintf("the surface of %s joins %s and %s, and no spacing with this field gives its creepage", names, a, b)
 			one = one.Lacking(lack.Because(why, "spacing.field", "spacing.creepage"))
 			one.Remedy = fmt.Sprintf("describe a [[spacing]] with field = %q, its clearance, creepage and material", f.Name.V)
 			all = append(all, one)
 		}
+	}
+	return all
+}
+
+// stacks are the insulators with a free surface, those that touch one another together.
+func stacks(f *build.Arrangement, s *field.Solution) (all [][]string) {
+	seen := map[string]bool{}
+	for _, body := range s.Bare() {
+		if evidence.Open(f, body) || seen[body] {
+			continue
+		}
+		seen[body] = true
+		stack := []string{body}
+		for i := 0; i < len(stack); i++ {
+			for _, other := range s.Joined(stack[i]) {
+				if !evidence.Open(f, other) && !seen[other] {
+					seen[other] = true
+					stack = append(stack, other)
+				}
+			}
+		}
+		all = append(all, stack)
 	}
 	return all
 }
@@ -73,10 +94,10 @@ func judgedAlong(e *evidence.Evidence, f *build.Arrangement) bool {
 	return slices.ContainsFunc(e.Chain().Spacings, func(s chain.Spacing) bool { return s.Field.V == f.Name.V && s.Creepage.Set() })
 }
 
-// joins gives two electrodes of different potential that an insulator touches.
-func joins(f *build.Arrangement, s *field.Solution, body string) (a, b string, joined bool) {
+// joins gives two electrodes of different potential that a stack of insulators touches.
+func joins(f *build.Arrangement, s *field.Solution, stack []string) (a, b string, joined bool) {
 	for _, name := range s.Electrodes() {
-		if !slices.Contains(s.Facing(name), body) {
+		if !slices.ContainsFunc(s.Facing(name), func(body string) bool { return slices.Contains(stack, body) }) {
 			continue
 		}
 		if a == "" {

@@ -136,7 +136,7 @@ func judgeBreakdown(e *evidence.Evidence, f *build.Arrangement, w evidence.Where
 		quantity.Text(c.Volts), quantity.Text(c.Line.Gap()), c.Traced.Ends, quantity.Text(stands.Value), stands.Because, polarities(c))
 	finding.Remedy = "widen the gap, round its electrodes, or lower the voltage"
 	limit := stands.Value * limits.BreakdownShare
-	return finding.Assume(taken(e, f)...).Assume(stands.Assumptions...).
+	return finding.Assume(taken(e, f)...).Assume(stands.Assumptions...).ShareBy(rule.Of(stands.Value), shareSource).
 		Most(rule.Of(c.Volts), rule.Of(limit), limits.BreakdownShare/limits.BreakdownComfort-1).WithoutRemedyIfMet(), true
 }
 

@@ -87,8 +87,12 @@ func (a *applying) neverRelaxed(i int, limit rule.Amount) string {
 	return firmly(f)
 }
 
-// firmly says on what a limit rests that is neither practice nor memory.
+// firmly says on what a limit rests that is neither practice nor memory. Of a limit that is a
+// share of an estimate the share alone is asked: the estimate stays as it is.
 func firmly(f rule.Finding) string {
+	if share := f.Share; share.Text != "" {
+		f.Sources = []rule.Source{{Text: share.Text, Mark: share.Mark, Governs: true}}
+	}
 	governing := slices.DeleteFunc(slices.Clone(f.Sources), func(s rule.Source) bool { return !s.Governs })
 	if len(governing) == 0 {
 		return "no source of it is marked as the one that judges"

@@ -301,3 +301,29 @@ func FuzzRead(f *testing.F) {
 		}
 	})
 }
+
+// A share of an estimate is relaxed where the share is practice, though the estimate was read;
+// the estimate itself never is, nor a share that was read, nor one that concerns life.
+func TestTheShareOfAnEstimateIsPractice(t *testing.T) {
+	share := rule.Source{Text: "80 % of the estimate", Mark: rule.Practice}
+	of := func(concern rule.Concern, from rule.Source) rule.Finding {
+		return rule.Finding{Rule: "spacing.corona", Subject: "gap", Concern: concern, Sources: []rule.Source{standard, share}}.
+			ShareBy(volts(10e3), from).Most(volts(9e3), volts(8e3), 0.6)
+	}
+	for _, c := range []struct {
+		name, value string
+		was         rule.Finding
+		result      local.Result
+	}{
+		{"practice", "95 %", of(rule.Equipment, share), local.Relaxed},
+		{"the estimate", "101 %", of(rule.Equipment, share), local.Refused},
+		{"read", "95 %", of(rule.Equipment, standard), local.Refused},
+		{"not said", "95 %", of(rule.Equipment, rule.Source{}), local.Refused},
+		{"life", "95 %", of(rule.Life, share), local.Refused},
+	} {
+		got, outcomes := apply(t, relaxation("spacing.corona", c.value), c.was)
+		if outcomes[0].Result != c.result || (got[0].Verdict == rule.Marginal) != (c.result == local.Relaxed) {
+			t.Errorf("%s: %s, %+v", c.name, got[0].Verdict, outcomes[0])
+		}
+	}
+}

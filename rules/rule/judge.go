@@ -28,6 +28,12 @@ func (f Finding) ShareOf(whole Amount) Finding {
 	return f
 }
 
+// ShareBy says what the limit is a share of, and where that share comes from.
+func (f Finding) ShareBy(whole Amount, from Source) Finding {
+	f.Whole, f.Share = &whole, from
+	return f
+}
+
 // ratio is the margin; a demand of nothing is met without limit, said as a margin of a million.
 func ratio(a, b float64) float64 {
 	const boundless = 1e6

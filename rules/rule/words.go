@@ -98,6 +98,9 @@ type Finding struct {
 	Graded bool
 	// Whole is what the limit is a share of, a rating or an estimate; nil where it is none.
 	Whole *Amount
+	// Share is where that share comes from where it is not what Governs: the estimate may be
+	// read while its share is practice. The zero source: nowhere else.
+	Share Source
 
 	Under       string   // the condition judged: state, corner
 	Because     string   // one plain sentence

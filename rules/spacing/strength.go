@@ -65,7 +65,7 @@ func judgeBreakdown(e *evidence.Evidence, s *chain.Spacing) rule.Finding {
 	f.Sources = append(f.Sources, rule.Cited(cited)...)
 	f = shareOf(classed(s, x, f), x)
 	limit := stands.Value * usable(x)
-	f = f.ShareOf(rule.Of(stands.Value)).Most(rule.Of(x.Voltages.Peak), rule.Of(limit), limits.BreakdownShare/limits.BreakdownComfort-1).Assume(stands.Assumptions...).Assume(needlesTaken(s, x)...).Assume(beyond(e, s, x)...)
+	f = f.ShareBy(rule.Of(stands.Value), breakdownSource).Most(rule.Of(x.Voltages.Peak), rule.Of(limit), limits.BreakdownShare/limits.BreakdownComfort-1).Assume(stands.Assumptions...).Assume(needlesTaken(s, x)...).Assume(beyond(e, s, x)...)
 	switch {
 	case f.Verdict == rule.Meets:
 	case assumedOnly(f, limits.BreakdownShare/limits.BreakdownComfort-1):

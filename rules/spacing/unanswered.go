@@ -28,17 +28,21 @@ func unanswered(e *evidence.Evidence, f rule.Finding, s *chain.Spacing, x eviden
 	if x.Computed { // the line of a computed field has no other distance
 		return f.Lacking(why)
 	}
+	const least = "least"
 	b, v := x.BreakdownBounds(), x.Voltages.Peak
 	stands := func(at quantity.Voltage, how, because string, comfort float64) rule.Finding {
 		f.Under = x.Under.Text()
 		f.Because = fmt.Sprintf("%s across a gap that stands at %s %s (%s)", quantity.Text(v), how, quantity.Text(at), because)
 		f = shareOf(f, x)
-		return f.ShareOf(rule.Of(at)).Most(rule.Of(v), rule.Of(at*usable(x)), comfort)
+		if how == least { // an upper bound may not be used up
+			f = f.ShareBy(rule.Of(at), breakdownSource)
+		}
+		return f.Most(rule.Of(v), rule.Of(at*usable(x)), comfort)
 	}
 	switch {
 	case b.Least.Lack == nil && quantity.AtMost(v, b.Least.Value*usable(x)):
 		f.Sources = append(rule.Cited(b.Least.Sources), breakdownSource)
-		f = stands(b.Least.Value, "least", b.Least.Because, limits.BreakdownShare/limits.BreakdownComfort-1).Assume(b.Least.Assumptions...)
+		f = stands(b.Least.Value, least, b.Least.Because, limits.BreakdownShare/limits.BreakdownComfort-1).Assume(b.Least.Assumptions...)
 		if f.Verdict != rule.Meets {
 			f.Remedy = alternatives("lower the voltage", confirm)
 		}

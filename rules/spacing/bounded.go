@@ -42,7 +42,7 @@ func bounded(f rule.Finding, s *chain.Spacing, x evidence.Spacing, why *lack.Lac
 		f.Under = x.Lasting.Text()
 		f.Because += "no figure of this surface is known; " + b.Enough.Because
 		f.Sources = rule.Cited(b.Enough.Sources)
-		f = f.Least(rule.Of(counted), rule.Of(b.Enough.Value), limits.DistanceMargin).Assume(b.Enough.Assumptions...)
+		f = f.Least(rule.Of(counted), rule.Of(b.Enough.Value), limits.DistanceMargin).Assume(b.Enough.Assumptions...).Assume(classTaken(s)...)
 		f.Remedy = testOne
 	default:
 		f.Because += between(b, counted)

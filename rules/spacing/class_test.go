@@ -75,3 +75,30 @@ func TestACableAnswersForItsOwnInsulation(t *testing.T) {
 		}
 	}
 }
+
+// In vacuum and oil too reinforced insulation is dimensioned for 160 % of the peak, so the
+// distance asked for rests on the class: where none is given that is said. What stands the
+// voltage in vacuum does not ask for a class, and nothing is said of one.
+func TestTheClassLeftOutIsSaidWhereItCounts(t *testing.T) {
+	in := func(medium, class string) map[string]rule.Finding {
+		return findings(t, site(0)+fmt.Sprintf("[[spacing]]\nname = \"g\"\nvoltage = \"10 kV\"\nmedium = %q\nclearance = \"20 mm\"\nshape = { kind = \"plates\" }\n%s%s", medium, class,
+			map[string]string{"vacuum": "finish = \"polished\"\nconditioned = true\nstressed_area = \"80 mm2\"\npressure = \"1e-6 mbar\"\n"}[medium]))
+	}
+	said := func(f rule.Finding) bool { return strings.Contains(fmt.Sprint(f.Assumptions), "insulation is basic") }
+	for _, medium := range []string{"vacuum", "oil"} {
+		none, basic, reinforced := in(medium, ""), in(medium, "insulation = \"basic\"\n"), in(medium, "insulation = \"reinforced\"\n")
+		const of = "spacing.clearance | g"
+		if !said(none[of]) || none[of].Verdict != rule.Marginal || said(basic[of]) || said(reinforced[of]) {
+			t.Errorf("%s: without a class %s, %v", medium, none[of].Verdict, none[of].Assumptions)
+		}
+		if !(reinforced[of].Needed.Value > basic[of].Needed.Value) {
+			t.Errorf("%s: the class changes nothing", medium)
+		}
+		if said(none["spacing.breakdown | g"]) {
+			t.Errorf("%s: a class is spoken of where it does not count", medium)
+		}
+	}
+	if f := in("vacuum", "insulation = \"basic\"\n")["spacing.clearance | g"]; f.Verdict != rule.Meets {
+		t.Errorf("basic in vacuum: %s: %s", f.Verdict, f.Because)
+	}
+}

@@ -71,7 +71,7 @@ func gaseous(s *chain.Spacing) bool { return s.Medium.V == "air" || s.Medium.V =
 
 // classTaken is what is taken for granted where a spacing does not say what it has to do.
 func classTaken(s *chain.Spacing) []string {
-	if s.Insulation.Set() || s.Medium.V == "vacuum" {
+	if s.Insulation.Set() {
 		return nil
 	}
 	return []string{"insulation is basic where the spacing does not say; reinforced asks for more"}

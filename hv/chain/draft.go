@@ -43,7 +43,7 @@ var draftOther = []string{
 var draftRare = []string{
 	"load.permanent",
 	"multiplier.coupling_capacitor.value_at_voltage", "multiplier.smoothing_capacitor.value_at_voltage",
-	"spacing.also", "spacing.cti", "spacing.gas", "spacing.pressure", "spacing.temperature", "spacing.humidity", "spacing.gauge_factor", "spacing.impulse_tested",
+	"spacing.also", "spacing.cti", "spacing.gas", "spacing.pressure", "spacing.temperature", "spacing.humidity", "spacing.gauge_factor", "spacing.impulse_tested", "spacing.mains_transients",
 	"spacing.ribs", "spacing.ribs.count", "spacing.ribs.depth", "spacing.ribs.width", "spacing.electrode_surface", "spacing.tested_voltage", "spacing.tested_length",
 }
 

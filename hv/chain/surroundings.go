@@ -119,6 +119,7 @@ type Spacing struct {
 	Temperature   document.Given[quantity.Temperature] `key:"temperature" range:">= -60 degC, <= 300 degC" means:"temperature of the gas (default: the site's air)" example:"30 degC"`
 	Humidity      document.Given[quantity.Humidity]    `key:"humidity" range:">= 0 g/m3, <= 60 g/m3" means:"absolute humidity" example:"11 g/m3"`
 	GaugeFactor   document.Given[float64]              `key:"gauge_factor" range:"> 0, <= 100" means:"true pressure over gauge reading" example:"1.0"`
+	Transients    document.Given[bool]                 `key:"mains_transients" means:"transients of the mains reach this gap; where its voltage is stated, or it is at a coupling node, nothing else tells" example:"false"`
 	ImpulseTested document.Given[bool]                 `key:"impulse_tested" means:"an impulse voltage test was done" example:"false"`
 
 	Ribs             *Ribs                            `key:"ribs" means:"ribs across the surface; the creepage is measured over them"`

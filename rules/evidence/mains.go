@@ -3,10 +3,12 @@ package evidence
 import (
 	"math"
 	"slices"
+	"strings"
 
 	"kilovet/hv/chain"
 	"kilovet/hv/lack"
 	"kilovet/hv/quantity"
+	"kilovet/insulation"
 	"kilovet/insulation/gap"
 )
 
@@ -84,10 +86,53 @@ func (e *Evidence) mains(s *chain.Spacing) *gap.Mains {
 		reached = reached || line || driven
 		secondary = secondary || driven && !line
 	}
+	if !reached && s.Transients.V {
+		reached, secondary = true, !s.Voltage.Set()
+	}
 	if e.chain.Site == nil || !reached {
 		return nil
 	}
+	return e.mainsOf(secondary)
+}
+
+func (e *Evidence) mainsOf(secondary bool) *gap.Mains {
 	return &gap.Mains{LineToNeutral: e.chain.Site.Mains.V, Category: e.chain.Site.OvervoltageCategory.V, Secondary: secondary}
+}
+
+// TransientsTaken is what is taken for granted of the transients of a mains that is described
+// where nothing tells whether they reach a gap in air and they would ask for more than is
+// there: its voltage is stated by hand, or it is at a node that the drive feeds through a capacitor.
+func (e *Evidence) TransientsTaken(s *chain.Spacing, x Spacing, enough func(quantity.Length) bool) []string {
+	if e.chain.Site == nil || !e.chain.Site.Mains.Set() || s.Transients.Set() || x.Gap.Mains != nil {
+		return nil
+	}
+	stated, coupled := s.Voltage.Set(), s.From.Set() && e.coupled(s)
+	if !stated && !coupled {
+		return nil
+	}
+	with := x.Gap
+	with.Mains = e.mainsOf(!stated)
+	more, err := insulation.ClearanceNeeded(with, x.Voltages)
+	need := x.Assessment.ClearanceNeeded
+	if need.Lack != nil || err == nil && (quantity.AtMost(more.Value, need.Value) || enough(more.Value)) {
+		return nil
+	}
+	text := "no transients of the mains reach it, its voltage being stated: give its nodes, or spacing.mains_transients"
+	switch {
+	case s.Of != nil:
+		text = "no transients of the mains reach it, its voltage being stated: give feedthrough.node in place of feedthrough.voltage"
+	case !stated:
+		text = "no transients of the drive reach it through the coupling capacitors: give spacing.mains_transients"
+	}
+	if err == nil {
+		text += "; with them " + quantity.Text(more.Value) + " would be needed"
+	}
+	return []string{text}
+}
+
+// coupled reports whether a spacing is at a node of the coupling column.
+func (e *Evidence) coupled(s *chain.Spacing) bool {
+	return slices.ContainsFunc(append(nodesOf(s), s.To.V), func(n string) bool { return strings.HasPrefix(n, "coupling.") })
 }
 
 // atDrive reports whether a node is one of the drive.

@@ -109,7 +109,7 @@ func distance(e *evidence.Evidence, s *chain.Spacing, id string, given document.
 	}
 	f.Because += taken
 	f = shareOf(f, x)
-	f = f.Least(rule.Of(counted), rule.Of(need.Value), limits.DistanceMargin).Assume(need.Assumptions...).Assume(classTaken(s)...)
+	f = f.Least(rule.Of(counted), rule.Of(need.Value), limits.DistanceMargin).Assume(need.Assumptions...).Assume(classTaken(s)...).Assume(transients(e, s, x, counted)...)
 	switch {
 	case f.Verdict == rule.Meets:
 	case assumedOnly(f, limits.DistanceMargin):
@@ -122,6 +122,14 @@ func distance(e *evidence.Evidence, s *chain.Spacing, id string, given document.
 		f.Remedy = alternatives(way, lowered(id, x), "lower the voltage")
 	}
 	return f
+}
+
+// transients is what is taken for granted of those of the mains.
+func transients(e *evidence.Evidence, s *chain.Spacing, x evidence.Spacing, counted quantity.Length) []string {
+	if !inAir(s) {
+		return nil
+	}
+	return e.TransientsTaken(s, x, func(more quantity.Length) bool { return quantity.AtLeast(counted, more*(1+limits.DistanceMargin)) })
 }
 
 // countedOf is the part of a given distance that counts, and what is said of the rest.

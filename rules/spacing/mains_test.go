@@ -85,3 +85,37 @@ func TestTransientsReachThroughTheNodesBeside(t *testing.T) {
 		}
 	}
 }
+
+// A stated voltage tells nothing of the transients of a mains that is described: 2.5 kV of
+// category II at 230 V ask for 1.5 mm (IEC 60664-1 Tables F.1, F.2), which is said where the
+// gap is under that, and a key answers. Likewise at a coupling node alone, where IEC 61010-1
+// Table K.11 asks for 10 mm.
+func TestTransientsThatNothingTellsOfAreSaid(t *testing.T) {
+	stated := func(clearance, more string) rule.Finding {
+		text := strings.Replace(site(0), "pollution_degree", "mains = \"230 V\"\novervoltage_category = 2\npollution_degree", 1)
+		return findings(t, text+"[[spacing]]\nname = \"g\"\nvoltage = \"325 V\"\nmedium = \"air\"\ninsulation = \"basic\"\nmaterial = \"PTFE\"\ncreepage = \"8 mm\"\nclearance = \""+clearance+"\"\n"+more)["spacing.clearance | g"]
+	}
+	coupled := func(clearance, more string) rule.Finding {
+		return findings(t, onMains(2, 3, mainsOf230, halfway, "from = \"coupling.1\"\nto = \"ground\"\ncreepage = \"25 mm\"\nmaterial = \"PTFE\"\nclearance = \""+clearance+"\"\n"+more))["spacing.clearance | g"]
+	}
+	said := func(f rule.Finding) bool { return strings.Contains(fmt.Sprint(f.Assumptions), "no transients of the") }
+	for name, c := range map[string]struct {
+		of    func(string, string) rule.Finding
+		small string
+		large string
+		asks  string
+	}{"stated": {stated, "0.5 mm", "2 mm", "1.5 mm"}, "at a coupling node": {coupled, "6 mm", "12 mm", "10 mm"}} {
+		if f := c.of(c.small, ""); f.Verdict != rule.Marginal || !said(f) || !strings.Contains(fmt.Sprint(f.Assumptions), c.asks+" would be needed") {
+			t.Errorf("%s: %s, %v", name, f.Verdict, f.Assumptions)
+		}
+		if f := c.of(c.large, ""); f.Verdict != rule.Meets {
+			t.Errorf("%s, wide enough: %s, %v", name, f.Verdict, f.Assumptions)
+		}
+		if f := c.of(c.small, "mains_transients = true\n"); f.Verdict != rule.Fails {
+			t.Errorf("%s, reached: %s: %s", name, f.Verdict, f.Because)
+		}
+		if f := c.of(c.small, "mains_transients = false\n"); f.Verdict != rule.Meets {
+			t.Errorf("%s, not reached: %s, %v", name, f.Verdict, f.Assumptions)
+		}
+	}
+}

@@ -59,6 +59,7 @@ func (o *HoldOptions) together(most int) (quantity.Voltage, *Periodic, error) {
 		return 0, nil, lack.Failed("there is no node %s that is tied to ground", o.Node)
 	}
 	h := newSearch(newShooter(s))
+	h.swift = o.Swift
 	if most > 0 {
 		h.most = most
 	}

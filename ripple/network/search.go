@@ -57,12 +57,20 @@ func (s *search) converge(g grade) error {
 		size := norm(s.r)
 		stalled := size > 0.3*last
 		last = size
-		small := 1e-9
+		small := s.small()
 		if stalled { // what is left is rounding, which a mode that only leakage ties down makes much of
 			small = 1e-5
 		}
 		return norm(s.step) <= small*norm(s.x) && s.balanced(stalled)
 	})
+}
+
+// small is the correction, in parts of the state, that ends a search.
+func (s *search) small() float64 {
+	if s.swift {
+		return 1e-6
+	}
+	return 1e-9
 }
 
 // until walks and corrects until told that it is done.
@@ -109,12 +117,12 @@ func (s *search) once(g grade, done func() bool) (finished bool, err error) {
 		s.stray, s.last, s.trial, s.still = true, math.Inf(1), false, 0
 		return false, nil
 	}
+	if g == fine && s.atRest(size) {
+		s.pace.track = s.linear
+		return true, nil
+	}
 	if s.stray || s.still > 2 || !s.correct() {
-		s.stray, s.still, s.last, s.pace.smooth, s.trial = false, 0, math.Inf(1), false, false
-		if s.leaps++; s.leaps > s.patience {
-			return false, s.unreached()
-		}
-		return false, s.advance(math.Inf(1))
+		return false, s.leapOn()
 	}
 	s.work.Iterations++
 	f, err := s.lacking()
@@ -136,6 +144,21 @@ func (s *search) once(g grade, done func() bool) (finished bool, err error) {
 	}
 	s.pace.smooth = s.largestCharge(s.step) <= exacting*s.pace.passed
 	return false, nil
+}
+
+// atRest reports whether the largest correction that ever answered such a change over the
+// period would end a swift search: then none is worked out.
+func (s *search) atRest(size float64) bool {
+	return s.swift && s.level == nil && s.amplified > 0 && s.amplified*size <= s.small()*norm(s.x) && s.balanced(false)
+}
+
+// leapOn leads the state on in a leap, where Newton's method cannot be believed.
+func (s *search) leapOn() error {
+	s.stray, s.still, s.last, s.pace.smooth, s.trial = false, 0, math.Inf(1), false, false
+	if s.leaps++; s.leaps > s.patience {
+		return s.unreached()
+	}
+	return s.advance(math.Inf(1))
 }
 
 // bold is how many times the correction of the circuit between the peaks one of
@@ -193,9 +216,12 @@ func (s *search) answer(x []float64) {
 }
 
 // balanced reports whether the charges come back to 1e-8 of what the diodes pass,
-// or, where rounding keeps them from coming any closer, to 3e-7.
+// or, where rounding keeps them from coming any closer, to 3e-7; in a swift search to 1e-4.
 func (s *shooter) balanced(stalled bool) bool {
 	worst, most := s.largestCharge(s.r), s.largestCharge(s.x)
+	if s.swift {
+		return worst <= math.Max(1e-4*s.pace.passed, 1e-11*most)
+	}
 	if stalled {
 		return worst <= math.Max(3e-7*s.pace.passed, 1e-11*most)
 	}

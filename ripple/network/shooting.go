@@ -24,6 +24,7 @@ type shooter struct {
 	lanes           []trio
 	on              []bool
 	pressed         float64 // how hard the diodes are pressed in the guess
+	swift           bool    // no more than limits and ratings ask for
 	work            Work
 }
 

@@ -18,6 +18,10 @@ type Options struct {
 	// Most is the number of steps after which the search is given up; zero serves any
 	// ordinary circuit several times over.
 	Most int
+	// Swift ends the search where the state is known to a part in a million and the charges
+	// come back to a ten thousandth of what the diodes pass, for figures that are compared
+	// with limits and ratings; else it is 1e-9 and 1e-8.
+	Swift bool
 
 	work *Work // adds up what searches cost, given up or not
 }
@@ -38,6 +42,7 @@ func Steady(c *circuit.Circuit, o Options) (*Periodic, error) {
 		return nil, err
 	}
 	h := newSearch(newShooter(s))
+	h.swift = o.Swift
 	if o.Most > 0 {
 		h.most = o.Most
 	}

@@ -88,7 +88,7 @@ func (e *Evidence) settle(peak quantity.Voltage, from *network.Periodic) (failur
 	if err != nil {
 		return failure{}, err
 	}
-	s, err := network.Settle(trusted(c), network.Failed{Part: e.condition.Fault.Part, Ladder: e.condition.Fault.Cuts}, network.Options{Frequency: e.chain.Drive.Frequency.V, From: from})
+	s, err := network.Settle(trusted(c), network.Failed{Part: e.condition.Fault.Part, Ladder: e.condition.Fault.Cuts}, network.Options{Frequency: e.chain.Drive.Frequency.V, From: from, Swift: true})
 	if err != nil {
 		return failure{}, err
 	}
@@ -124,7 +124,7 @@ func (e *Evidence) seek(wanted, first quantity.Voltage) (failure, error) {
 	}
 	peak, p, err := network.Seek(network.HoldOptions{
 		Node: "divider.tap", Set: wanted, First: first,
-		Options: network.Options{Frequency: e.chain.Drive.Frequency.V, From: e.alike()},
+		Options: network.Options{Frequency: e.chain.Drive.Frequency.V, From: e.alike(), Swift: true},
 		Build:   e.trustedAt,
 	})
 	if err != nil {

@@ -124,6 +124,11 @@ func (s *search) once(g grade, done func() bool) (finished bool, err error) {
 	if s.stray || s.still > 2 || !s.correct() {
 		return false, s.leapOn()
 	}
+	return s.improve(g, size, done)
+}
+
+// improve follows the correction in hand, or is done with it.
+func (s *search) improve(g grade, size float64, done func() bool) (finished bool, err error) {
 	s.work.Iterations++
 	f, err := s.lacking()
 	if err != nil {

@@ -152,44 +152,65 @@ func (r *rise) climb(e *envelope, until float64) (done bool, err error) {
 		r.out.Work.Products += e.work.Products
 	}()
 	e.periods = r.periods
-	before, at, beyond := append([]float64(nil), e.x...), e.periods, math.Inf(1)
-	below, above := 0.0, 0.0
+	at := foothold{x: append([]float64(nil), e.x...), periods: e.periods, beyond: math.Inf(1)}
 	for range 400 {
 		if e.periods >= until {
 			return false, nil
 		}
-		leapt := e.periods-at > 1
-		up, err := r.look(e)
-		if err != nil {
-			return false, err
+		if done, err := r.tread(e, &at); done || err != nil {
+			return done, err
 		}
-		if !up || !leapt {
-			r.ledger.enter(e.linear)
-		}
-		if up && !leapt {
-			r.out.Reached = quantity.Time(e.periods*e.period + r.reached)
-			return true, nil
-		}
-		if up {
-			beyond, above = e.periods, r.highest
-			copy(e.x, before)
-			e.periods = at
-			if err := e.here(rough); err != nil {
-				return false, err
-			}
-		} else {
-			below = r.highest
-		}
-		copy(before, e.x)
-		at = e.periods
-		most := until - at
-		if !math.IsInf(beyond, 1) {
-			part := (r.level - below) / (above - below)
-			most = math.Min(most, math.Max(1, math.Floor((beyond-at)*part)-1))
-		}
-		if err := e.advance(most); err != nil {
+		if err := e.advance(at.reach(until, r.level)); err != nil {
 			return false, err
 		}
 	}
 	return false, lack.Failed("the start took more than 400 leaps")
+}
+
+// tread looks at the period at the present state: it is the one in which the node comes
+// up, or a foothold, or beyond it, and then the climb goes back to the last foothold.
+func (r *rise) tread(e *envelope, at *foothold) (done bool, err error) {
+	leapt := e.periods-at.periods > 1
+	up, err := r.look(e)
+	if err != nil {
+		return false, err
+	}
+	if !up || !leapt {
+		r.ledger.enter(e.linear)
+	}
+	switch {
+	case up && !leapt:
+		r.out.Reached = quantity.Time(e.periods*e.period + r.reached)
+		return true, nil
+	case up:
+		at.beyond, at.above = e.periods, r.highest
+		copy(e.x, at.x)
+		e.periods = at.periods
+		if err := e.here(rough); err != nil {
+			return false, err
+		}
+	default:
+		at.below = r.highest
+	}
+	copy(at.x, e.x)
+	at.periods = e.periods
+	return false, nil
+}
+
+// foothold is the last state at which the node had not come up.
+type foothold struct {
+	x            []float64
+	periods      float64
+	beyond       float64 // periods at which it had
+	below, above float64 // its highest voltage here and there
+}
+
+// reach is the number of periods that the next leap may take.
+func (f *foothold) reach(until, level float64) float64 {
+	most := until - f.periods
+	if math.IsInf(f.beyond, 1) {
+		return most
+	}
+	part := (level - f.below) / (f.above - f.below)
+	return math.Min(most, math.Max(1, math.Floor((f.beyond-f.periods)*part)-1))
 }

@@ -5,6 +5,7 @@ import (
 	"kilovet/hv/quantity"
 	"kilovet/insulation/gap"
 	"kilovet/insulation/gas"
+	"kilovet/insulation/oil"
 	"kilovet/insulation/shape"
 	"kilovet/insulation/vacuum"
 )
@@ -48,6 +49,11 @@ func Ionising(g gap.Gap) (quantity.Field, gap.Source, error) {
 	return gas.Critical(s)
 }
 
+// WorkingAlong is the field that a place in oil may have in service.
+func WorkingAlong(g gap.Gap, l shape.Line) (gap.Answer[quantity.Field], error) {
+	return oil.WorkingAlong(g, l)
+}
+
 func onsetAlong(g gap.Gap, l shape.Line) (gap.Answer[quantity.Voltage], error) {
 	if g.Medium == gap.Vacuum {
 		return vacuum.OnsetAlong(g, l)
@@ -75,8 +81,11 @@ func fieldAlong(l shape.Line, onset gap.Result[quantity.Voltage]) (gap.Answer[qu
 
 func breakdownAlong(g gap.Gap, l shape.Line, sharp gap.Polarity, starts gap.Result[quantity.Voltage]) (gap.Answer[quantity.Voltage], error) {
 	none := gap.Answer[quantity.Voltage]{}
-	if g.Medium == gap.Vacuum {
+	switch g.Medium {
+	case gap.Vacuum:
 		return vacuum.BreakdownAlong(g, l)
+	case gap.Oil:
+		return oil.BreakdownAlong(g, l)
 	}
 	if err := inGas(g); err != nil {
 		return none, err

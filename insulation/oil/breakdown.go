@@ -6,6 +6,7 @@ import (
 	"kilovet/hv/lack"
 	"kilovet/hv/quantity"
 	"kilovet/insulation/gap"
+	"kilovet/insulation/shape"
 )
 
 // powerLaw is V = K d^n, kV and mm.
@@ -85,20 +86,39 @@ func Breakdown(g gap.Gap) (gap.Answer[quantity.Voltage], error) {
 	} else if !quantity.AtLeast(d, testGap) {
 		return none, lack.Range("breakdown of oil is known from 2.5 mm on, asked for %s", quantity.Text(d))
 	}
-	assumed, tested, err := passes(g)
+	a, err := breaksAt(g, l, because)
 	if err != nil {
 		return none, err
-	}
-	a := gap.Answer[quantity.Voltage]{
-		Value:       quantity.Voltage(float64(cautious) / float64(l.PerVolt(0))),
-		Because:     because,
-		Sources:     append([]gap.Source{cautiousSource.Governing()}, tested...),
-		Assumptions: assumed,
 	}
 	if clean, err := CleanBreakdown(l.Gap()); err == nil {
 		a.Shown = []gap.Beside[quantity.Voltage]{{Value: clean.Value * quantity.Voltage(l.Utilisation()), Source: clean.Sources[0]}}
 	}
 	return a, nil
+}
+
+// BreakdownAlong is the voltage across a critical line, whose field was computed, at which
+// oil is expected to break down: where its peak field reaches 10 kV/mm, from 2.5 to 12 mm;
+// of the gap the state of its oil is read. Other lengths and oil that failed its test are a
+// lack.
+func BreakdownAlong(g gap.Gap, l shape.Line) (gap.Answer[quantity.Voltage], error) {
+	if d := l.Gap(); !quantity.AtLeast(d, testGap) || !quantity.AtMost(d, longestClean) {
+		return gap.Answer[quantity.Voltage]{}, lack.Range("breakdown of oil along a computed line is known from 2.5 to 12 mm, asked for %s", quantity.Text(d))
+	}
+	return breaksAt(g, l, "oil at 10 kV/mm of peak field")
+}
+
+// breaksAt is the voltage at which the peak field of a line is what oil stands.
+func breaksAt(g gap.Gap, l shape.Line, because string) (gap.Answer[quantity.Voltage], error) {
+	assumed, tested, err := passes(g)
+	if err != nil {
+		return gap.Answer[quantity.Voltage]{}, err
+	}
+	return gap.Answer[quantity.Voltage]{
+		Value:       quantity.Voltage(float64(cautious) / float64(l.PerVolt(0))),
+		Because:     because,
+		Sources:     append([]gap.Source{cautiousSource.Governing()}, tested...),
+		Assumptions: assumed,
+	}, nil
 }
 
 // ClearanceForBreakdown is the gap whose breakdown is at a voltage, sharpest radius kept.

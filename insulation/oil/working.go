@@ -4,6 +4,7 @@ import (
 	"kilovet/hv/lack"
 	"kilovet/hv/quantity"
 	"kilovet/insulation/gap"
+	"kilovet/insulation/shape"
 )
 
 // Working stress of small oil gaps under DC; the lower judges.
@@ -16,6 +17,8 @@ var (
 	workingSource = gap.Source{Text: "2 kV/mm in small oil gaps under DC", Mark: gap.Practice}
 	boldSource    = gap.Source{Text: "5 kV/mm in small oil gaps under DC, clean and filtered", Mark: gap.Practice}
 )
+
+const unread = "the working stress of oil is common practice, no source was read"
 
 // Gaps that practice calls small.
 const (
@@ -38,7 +41,7 @@ func ClearanceNeeded(g gap.Gap, v gap.Voltages) (gap.Answer[quantity.Length], er
 	a := gap.Answer[quantity.Length]{
 		Value: d, Because: quantity.Text(v.Peak) + " peak at 2 kV/mm in oil",
 		Sources:     append([]gap.Source{workingSource.Governing()}, tested...),
-		Assumptions: append([]string{"the working stress of oil is common practice, no source was read"}, assumed...),
+		Assumptions: append([]string{unread}, assumed...),
 	}
 	if bold, err := gapAt(g, v.Peak, BoldField); err == nil {
 		a.Shown = []gap.Beside[quantity.Length]{{Value: bold, Source: boldSource}}
@@ -57,6 +60,26 @@ func WorkingVoltage(g gap.Gap) (gap.Answer[quantity.Voltage], error) {
 	}
 	return gap.Answer[quantity.Voltage]{
 		Value: quantity.Voltage(float64(WorkingField) / float64(l.PerVolt(0))), Because: "2 kV/mm in oil", Sources: []gap.Source{workingSource.Governing()},
+	}, nil
+}
+
+// WorkingAlong is the field that a place in oil may have in service, 2 kV/mm, where the line
+// from it is from 0.1 to 50 mm long; beside it that of clean and filtered oil. Both are
+// practice. Oil that failed its test is a lack.
+func WorkingAlong(g gap.Gap, l shape.Line) (gap.Answer[quantity.Field], error) {
+	none := gap.Answer[quantity.Field]{}
+	if !quantity.AtLeast(l.Gap(), closestSmall) || !quantity.AtMost(l.Gap(), widestSmall) {
+		return none, lack.Range("the working stress of oil is that of gaps of 0.1 to 50 mm, asked for %s", quantity.Text(l.Gap()))
+	}
+	assumed, tested, err := passes(g)
+	if err != nil {
+		return none, err
+	}
+	return gap.Answer[quantity.Field]{
+		Value: WorkingField, Because: "2 kV/mm in small oil gaps under DC",
+		Sources:     append([]gap.Source{workingSource.Governing()}, tested...),
+		Assumptions: append([]string{unread}, assumed...),
+		Shown:       []gap.Beside[quantity.Field]{{Value: BoldField, Source: boldSource}},
 	}, nil
 }
 

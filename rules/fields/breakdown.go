@@ -18,10 +18,10 @@ var shareSource = rule.Source{Text: "highest voltage at most 80 % of the breakdo
 var breakdown = rule.Rule{
 	ID: "field.breakdown", Title: "Breakdown of computed gaps",
 	Demands: "The voltage along the critical line of each electrode stays at or below 80 % of the breakdown estimate of this very shape, for the polarity it has.",
-	Applies: "Every computed field in vacuum, air or gas, where the field line from the greatest field on an electrode ends on another.",
+	Applies: "Every computed field in vacuum, air, gas or oil, where the field line from the greatest field on an electrode ends on another.",
 	Margin:  "marginal above 50 % of the estimate",
 	Concern: rule.Equipment,
-	Sources: []rule.Source{shareSource, {Text: "vacuum: 40 kV/mm or 39 kV/√mm at the field of the electrode; air: streamer onset, or what sharp electrodes at the distance stand", Mark: rule.Derived, Governs: true}},
+	Sources: []rule.Source{shareSource, {Text: "vacuum: 40 kV/mm or 39 kV/√mm at the field of the electrode; air: streamer onset, or what sharp electrodes at the distance stand; another gas: streamer onset; oil: 10 kV/mm at the electrode, from 2.5 to 12 mm", Mark: rule.Derived, Governs: true}},
 	Example: rule.Example{
 		Of:    "plate",
 		Swaps: []rule.Swap{{Was: `voltage = "-20 kV"`, Becomes: `voltage = "-40 kV"`}},
@@ -122,14 +122,14 @@ func judgeBreakdown(e *evidence.Evidence, f *build.Arrangement, w evidence.Where
 	c, err := e.Critical(f, w)
 	switch {
 	case err != nil:
-		return finding.Lacking(err), true
+		return lacking(f, finding, err), true
 	case c.Traced.Closed:
 		return finding, false
 	}
 	finding.Under = c.Text()
 	stands := c.Strength.Breakdown
 	if stands.Lack != nil {
-		return finding.Lacking(stands.Lack), true
+		return lacking(f, finding, stands.Lack), true
 	}
 	finding.Sources = append(rule.Cited(stands.Sources), shareSource)
 	finding.Because = fmt.Sprintf("%s along %s of field line to %s, expected to break down at %s (%s)%s",

@@ -3,7 +3,6 @@ package fields
 import (
 	"fmt"
 
-	"kilovet/hv/lack"
 	"kilovet/hv/quantity"
 	"kilovet/insulation"
 	"kilovet/insulation/field"
@@ -96,17 +95,17 @@ func judgeEdge(e *evidence.Evidence, f *build.Arrangement, x field.Edge, finding
 	finding.Remedy = "round the edge, shield the junction, or lower the voltage"
 	distance, err := e.JudgedAt(f, x)
 	if err != nil {
-		return finding.Lacking(err)
+		return lacking(f, finding, err)
 	}
 	at, err := e.AtEdge(f, x, distance)
 	if err != nil {
-		return finding.Lacking(err)
+		return lacking(f, finding, err)
 	}
 	finding.Under = at.Text()
 	g := e.Filling(f, at.Reading.Body)
 	limit, err := insulation.AtEdge(g, distance)
 	if err != nil {
-		return finding.Lacking(lack.Of(err))
+		return lacking(f, finding, err)
 	}
 	finding.Sources = append(rule.Cited(limit.Sources), limits.EdgeSource)
 	finding.Because = fmt.Sprintf("%s at a distance of %s, with which the field goes to the power %.3f; %s", quantity.Text(at.Strength), quantity.Text(distance), at.Exponent, limit.Because)

@@ -19,6 +19,7 @@ var (
 	emissionSource = rule.Source{Text: "emission becomes measurable at 10 kV/mm on smooth metal (abstract)", Mark: rule.Read, Governs: true}
 	comfortSource  = rule.Source{Text: "up to 5 kV/mm comfortable, 5 to 10 kV/mm needs polish and conditioning", Mark: rule.Memory}
 	ionisingSource = rule.Source{Text: "air does not ionise below the field where gain and loss of electrons balance; above it a gap needs its streamer integral", Mark: rule.Derived, Governs: true}
+	oilSource      = rule.Source{Text: "2 kV/mm in small oil gaps under DC", Mark: rule.Practice}
 	coronaSource   = rule.Source{Text: "corona makes ozone and noise, it does not break a gap; sparks against an insulator eat it", Mark: rule.Practice}
 )
 
@@ -27,10 +28,10 @@ const strengthID = "field.strength"
 var strength = rule.Rule{
 	ID: strengthID, Title: "Field on electrodes",
 	Demands: "The computed field on each electrode, and in gas on each insulator, stays below what its medium takes without discharge.",
-	Applies: "Every computed field: in vacuum up to 10 kV/mm; in gas up to the field at which an avalanche along the field line grows to a streamer; oil is not judged.",
+	Applies: "Every computed field: in vacuum up to 10 kV/mm; in gas up to the field at which an avalanche along the field line grows to a streamer; in oil up to the working stress of small gaps.",
 	Margin:  "in vacuum marginal above 5 kV/mm, in gas above 91 % of onset; corona between electrodes is marginal, against an insulator it fails",
 	Concern: rule.Equipment,
-	Sources: []rule.Source{emissionSource, comfortSource, ionisingSource, coronaSource},
+	Sources: []rule.Source{emissionSource, comfortSource, ionisingSource, coronaSource, oilSource},
 	Example: rule.Example{
 		Of:    "plate",
 		Swaps: []rule.Swap{{Was: `voltage = "-20 kV"`, Becomes: `voltage = "-60 kV"`}},
@@ -74,7 +75,7 @@ func judgeStrength(e *evidence.Evidence, f *build.Arrangement, s *field.Solution
 func judgePlace(e *evidence.Evidence, f *build.Arrangement, w evidence.Where, body string, finding rule.Finding) rule.Finding {
 	p, err := e.Stress(f, w)
 	if err != nil {
-		return finding.Lacking(err)
+		return lacking(f, finding, err)
 	}
 	finding.Under = p.Text()
 	finding.Because = told(p, w)
@@ -89,9 +90,26 @@ func judgePlace(e *evidence.Evidence, f *build.Arrangement, w evidence.Where, bo
 		return finding.Most(rule.Of(p.Strength), rule.Of(vacuum.EmissionField), float64(vacuum.EmissionField/vacuum.ComfortableField)-1).WithoutRemedyIfMet()
 	case "air", "gas":
 		return judgeInGas(e, f, w, p, finding)
+	case "oil":
+		return judgeInOil(e, f, w, p, finding)
 	default:
 		return finding.Lacking(lack.Range("fields in %s are computed, not judged", string(g.Medium)))
 	}
+}
+
+// judgeInOil compares with the working stress, which is that of small gaps.
+func judgeInOil(e *evidence.Evidence, f *build.Arrangement, w evidence.Where, p evidence.Stress, finding rule.Finding) rule.Finding {
+	c, err := e.Critical(f, w)
+	if err != nil {
+		return lacking(f, finding, err)
+	}
+	limit, err := insulation.WorkingAlong(e.Filling(f, p.Body), c.Line)
+	if err != nil {
+		return lacking(f, finding, err)
+	}
+	finding.Sources = rule.Cited(limit.Sources)
+	finding.Because += "; along " + quantity.Text(c.Line.Gap()) + " of field line"
+	return finding.Assume(limit.Assumptions...).Most(rule.Of(p.Strength), rule.Of(limit.Value), limits.DistanceMargin).WithoutRemedyIfMet()
 }
 
 // judgeInGas compares with the ionising field first, which needs no line, then with the
@@ -99,7 +117,7 @@ func judgePlace(e *evidence.Evidence, f *build.Arrangement, w evidence.Where, bo
 func judgeInGas(e *evidence.Evidence, f *build.Arrangement, w evidence.Where, p evidence.Stress, finding rule.Finding) rule.Finding {
 	limit, source, err := insulation.Ionising(e.Filling(f, p.Body))
 	if err != nil {
-		return finding.Lacking(err)
+		return lacking(f, finding, err)
 	}
 	finding.Sources = []rule.Source{ionisingSource, {Text: source.Text, Mark: rule.Mark(source.Mark)}}
 	if quantity.AtMost(p.Strength, limit) {
@@ -108,11 +126,11 @@ func judgeInGas(e *evidence.Evidence, f *build.Arrangement, w evidence.Where, p 
 	finding.Because += fmt.Sprintf("; above %s, where the gas begins to ionise", quantity.Text(limit))
 	c, err := e.Critical(f, w)
 	if err != nil {
-		return finding.Lacking(err)
+		return lacking(f, finding, err)
 	}
 	onset, err := c.Limit()
 	if err != nil {
-		return finding.Lacking(err)
+		return lacking(f, finding, err)
 	}
 	finding.Sources = append(rule.Cited(onset.Sources), coronaSource)
 	finding.Because += fmt.Sprintf("; the streamer integral along %s of field line is %.3g times what a discharge takes", quantity.Text(c.Line.Gap()), float64(c.Streamer))

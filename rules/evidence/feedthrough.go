@@ -19,7 +19,8 @@ type Annulus struct {
 	Gap      gap.Gap        // the annulus alone
 	Switched quantity.Fraction
 	Settled  quantity.Fraction
-	Settling gap.Result[quantity.Time] // none where a figure of the sleeve is not known
+	Field    gap.Result[quantity.Fraction] // by the greatest computed field in it, just after switching
+	Settling gap.Result[quantity.Time]     // none where a figure of the sleeve is not known
 	Starts   gap.Result[quantity.Voltage]
 	Slit     solid.Slit
 }
@@ -67,6 +68,7 @@ func (e *Evidence) annulus(f *chain.Feedthrough, s solid.Sleeve, slit solid.Slit
 	a.Gap.Clearance = slit.To - slit.From
 	a.Settled, _ = slit.Share(solid.Settled)
 	a.Switched, _ = slit.Share(solid.Switched) // none where the permittivity is not known; the settled share judges
+	a.Field = gap.ResultOf(e.annulusByField(f, slit, part))
 	settling, err := s.Settling()
 	a.Settling = gap.ResultOf(gap.Answer[quantity.Time]{Value: settling}, err)
 	a.Starts = gap.ResultOf(e.starts(a))
@@ -85,12 +87,21 @@ func (e *Evidence) starts(a Annulus) (gap.Answer[quantity.Voltage], error) {
 	return a.Slit.AcrossInGas(state)
 }
 
+// Divided is the share just after switching that judges: the greater of that by layers and
+// that by the computed field where there is one.
+func (a Annulus) Divided() quantity.Fraction {
+	if a.Field.Lack != nil {
+		return a.Switched
+	}
+	return max(a.Switched, a.Field.Value)
+}
+
 // Takes is the highest voltage across the annulus: its settled share of the lasting part
 // of the voltage and its switched share of the rest, or of all of it just after switching.
 func (a Annulus) Takes(peak, lasting quantity.Voltage) quantity.Voltage {
-	lasting = min(lasting, peak)
-	settled := lasting*quantity.Voltage(a.Settled) + (peak-lasting)*quantity.Voltage(a.Switched)
-	return max(settled, peak*quantity.Voltage(a.Switched))
+	lasting, switched := min(lasting, peak), quantity.Voltage(a.Divided())
+	settled := lasting*quantity.Voltage(a.Settled) + (peak-lasting)*switched
+	return max(settled, peak*switched)
 }
 
 // Mean is the largest mean voltage between the pin and the plate of a feedthrough.

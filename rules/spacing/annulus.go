@@ -14,7 +14,7 @@ var sparkSource = rule.Source{Text: "an annulus of gas or vacuum beside an insul
 
 var annulus = rule.Rule{
 	ID: "feedthrough.annulus", Title: "Annulus beside the sleeve",
-	Demands: "The part of the voltage on a gap between pin and sleeve, or sleeve and hole, stays at or below that at which the gap begins to spark or emit; the worse of the sharing just after switching and after DC has settled judges.",
+	Demands: "The part of the voltage on a gap between pin and sleeve, or sleeve and hole, stays at or below that at which the gap begins to spark or emit; the worse of the sharing just after switching, by layers and by the computed field, and after DC has settled judges.",
 	Applies: "Feedthroughs whose sleeve does not fill its hole or is wider than its pin.",
 	Margin:  "marginal with less than 10 % in hand",
 	Concern: rule.Equipment,
@@ -82,6 +82,9 @@ func shared(a evidence.Annulus) string {
 	text := "its part is not known just after switching"
 	if a.Switched > 0 {
 		text = fmt.Sprintf("it takes %s just after switching", quantity.Text(a.Switched))
+	}
+	if a.Field.Lack == nil {
+		text += fmt.Sprintf(" (%s by the greatest computed field, %s)", quantity.Text(a.Field.Value), a.Field.Because)
 	}
 	text += fmt.Sprintf(", %s once DC has settled", quantity.Text(a.Settled))
 	if a.Settling.Lack != nil {

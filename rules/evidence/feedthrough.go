@@ -23,6 +23,8 @@ type Annulus struct {
 	Settling gap.Result[quantity.Time]     // none where a figure of the sleeve is not known
 	Starts   gap.Result[quantity.Voltage]
 	Slit     solid.Slit
+
+	part string // of the feedthrough
 }
 
 // Annuli are the annuli of a feedthrough; none where the sleeve fills hole and bore.
@@ -37,6 +39,9 @@ func (e *Evidence) Annuli(f *chain.Feedthrough) []Annulus {
 	}
 	if f.HasOuterGap() {
 		all = append(all, e.annulus(f, s, s.Outer(), chain.OuterAnnulus, f.Sleeve.OuterGap, f.Outer().Place))
+	}
+	for i := range all {
+		all[i].Field = gap.ResultOf(e.annulusField(f, all[i]))
 	}
 	return all
 }
@@ -61,14 +66,13 @@ func sleeveOf(f *chain.Feedthrough) solid.Sleeve {
 
 func (e *Evidence) annulus(f *chain.Feedthrough, s solid.Sleeve, slit solid.Slit, part string, fill document.Given[string], place document.Place) Annulus {
 	a := Annulus{
-		Name: f.Name.V + ": " + part, Medium: gap.Medium(fill.Or("air")), Assumed: !fill.Set(), Place: place, Slit: slit,
+		Name: f.Name.V + ": " + part, part: part, Medium: gap.Medium(fill.Or("air")), Assumed: !fill.Set(), Place: place, Slit: slit,
 		Gap: e.gap(&chain.Spacing{}),
 	}
 	a.Gap.Medium, a.Gap.Shape = a.Medium, &gap.Shape{Kind: gap.Coaxial, InnerRadius: slit.From, OuterRadius: slit.To}
 	a.Gap.Clearance = slit.To - slit.From
 	a.Settled, _ = slit.Share(solid.Settled)
 	a.Switched, _ = slit.Share(solid.Switched) // none where the permittivity is not known; the settled share judges
-	a.Field = gap.ResultOf(e.annulusByField(f, slit, part))
 	settling, err := s.Settling()
 	a.Settling = gap.ResultOf(gap.Answer[quantity.Time]{Value: settling}, err)
 	a.Starts = gap.ResultOf(e.starts(a))

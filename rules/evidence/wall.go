@@ -6,7 +6,6 @@ import (
 	"strings"
 
 	"kilovet/hv/chain"
-	"kilovet/hv/lack"
 	"kilovet/hv/quantity"
 	"kilovet/insulation/gap"
 	"kilovet/insulation/solid"
@@ -145,28 +144,8 @@ func thinSleeve(f *chain.Feedthrough) solid.Sleeve {
 // wallByField is the greatest computed field in the sleeve, on either side of the plate, as
 // a part of what the wall alone would have of the voltage on the pin.
 func (e *Evidence) wallByField(f *chain.Feedthrough) (gap.Answer[quantity.Fraction], error) {
-	most, last := gap.Answer[quantity.Fraction]{}, error(nil)
 	alone := 1 / (float64(f.Inner().V) * math.Log(float64(f.Outer().V/f.Inner().V))) // coaxial, at the bore, for each volt
-	for _, a := range e.Arrangements() {
-		if a.From != build.FromFeedthrough || a.Of != f.Name.V || a.Err != nil {
-			continue
-		}
-		p, err := e.Stress(a, e.ClearOfEdges(a, Where{Body: build.Sleeve}))
-		if err != nil {
-			last = err
-			continue
-		}
-		on := math.Abs(float64(p.potentials[build.Pin] - p.potentials[build.Plate]))
-		if share := quantity.Fraction(float64(p.Strength) / (alone * on)); share > most.Value {
-			most.Value = share
-			most.Because = fmt.Sprintf("%s at r %s, z %s of the %s", quantity.Text(p.Strength), quantity.Text(p.At.R), quantity.Text(p.At.Z), strings.TrimPrefix(a.Name.V, f.Name.V+", "))
-		}
-	}
-	if most.Value == 0 {
-		if last == nil {
-			last = lack.Failed("its field is not worked out")
-		}
-		return most, last
-	}
-	return most, nil
+	return e.shareByField(f, alone, func(a *build.Arrangement) (Stress, error) {
+		return e.Stress(a, e.ClearOfEdges(a, Where{Body: build.Sleeve}))
+	})
 }

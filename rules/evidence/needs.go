@@ -30,13 +30,17 @@ func (x Spacing) Across() Spacing {
 // that the spacing stands a voltage.
 func (x Spacing) StandsFrom(d quantity.Length, v quantity.Voltage) (quantity.Length, error) {
 	const ratio, most = 1.02, 30.0
-	x = x.Across()
 	for at := d; at < most*d; at *= ratio {
-		if a, err := insulation.Breakdown(insulation.WithGap(x.Gap, at), x.Voltages.Sharp); err == nil && quantity.AtLeast(a.Value, v) {
+		if a, err := x.StandsOver(at); err == nil && quantity.AtLeast(a.Value, v) {
 			return at, nil
 		}
 	}
 	return 0, lack.Failed("no distance is known to stand %s", quantity.Text(v))
+}
+
+// StandsOver is what the spacing stands over another distance, the sharpest radius kept.
+func (x Spacing) StandsOver(d quantity.Length) (gap.Answer[quantity.Voltage], error) {
+	return insulation.Breakdown(insulation.WithGap(x.Across().Gap, d), x.Voltages.Sharp)
 }
 
 // RadiusFor is the sharpest radius at which it breaks down at a voltage, the distance kept.

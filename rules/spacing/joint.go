@@ -74,10 +74,24 @@ func clearanceFor(e *evidence.Evidence, s *chain.Spacing, x evidence.Spacing, al
 	switch both := againstBoth(e, s, x); {
 	case both != "":
 		return both
-	case x.HasWork() && x.Gap.Shape != nil && alone != "" && x.Assessment.Breakdown.Lack == nil:
+	case x.HasWork() && x.Gap.Shape != nil && alone != "" && breaksDown(x):
 		return "no one size is enough: the breakdown estimate asks for a larger radius too, beside this: " + alone
 	}
 	return alone
+}
+
+// breaksDown reports whether the breakdown estimate, where there is one at the distance there
+// is or at the one that the clearance asks for, is an obstacle of its own.
+func breaksDown(x evidence.Spacing) bool {
+	if x.Assessment.Breakdown.Lack == nil {
+		return true
+	}
+	need := x.Assessment.ClearanceNeeded
+	if need.Lack != nil {
+		return false
+	}
+	a, err := x.StandsOver(need.Value * (1 + limits.DistanceMargin))
+	return err == nil && !quantity.AtLeast(a.Value, comfortable(x))
 }
 
 // againstWork is the radius with which a spacing bears its peak at work, the distance kept.

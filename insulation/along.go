@@ -49,8 +49,12 @@ func Ionising(g gap.Gap) (quantity.Field, gap.Source, error) {
 	return gas.Critical(s)
 }
 
-// WorkingAlong is the field that a place in oil may have in service.
+// WorkingAlong is the field that the place at the start of a critical line in oil may have
+// in service; other media have no such law, which is a lack.
 func WorkingAlong(g gap.Gap, l shape.Line) (gap.Answer[quantity.Field], error) {
+	if g.Medium != gap.Oil {
+		return gap.Answer[quantity.Field]{}, lack.Range("no working field is known for %s", string(g.Medium))
+	}
 	return oil.WorkingAlong(g, l)
 }
 

@@ -44,7 +44,7 @@ func bestWithin(g gap.Gap, s gas.State, most float64) (quantity.Voltage, gap.Ans
 	var best gap.Answer[quantity.Voltage]
 	var last error = lack.Range("no narrower gap is known")
 	for d := most * (1 + 1e-12); d > 10e-6 && d > 1.0001e-4*float64(g.Shape.Sharpest()); d /= finer {
-		l, err := lineOf(withGap(g, quantity.Length(d)))
+		l, err := lineOf(WithGap(g, quantity.Length(d)))
 		if err != nil {
 			return 0, best, err
 		}

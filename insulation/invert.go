@@ -85,10 +85,7 @@ func RadiusForField(g gap.Gap, v quantity.Voltage, limit quantity.Field) (quanti
 }
 
 // WithGap is a gap with another clearance, its shape moved along, the sharpest radius kept.
-func WithGap(g gap.Gap, d quantity.Length) gap.Gap { return withGap(g, d) }
-
-// withGap is the gap with another clearance, its shape moved along.
-func withGap(g gap.Gap, d quantity.Length) gap.Gap {
+func WithGap(g gap.Gap, d quantity.Length) gap.Gap {
 	g.Clearance = d
 	if g.Shape != nil {
 		s := shape.WithGap(*g.Shape, d)
@@ -110,7 +107,7 @@ func overGaps(g gap.Gap, want float64, answer func(gap.Gap) (float64, error)) (q
 	if err != nil && (g.Medium == gap.Air || g.Medium == gap.InGas) {
 		return 0, err
 	}
-	law := func(d float64) (float64, error) { return answer(withGap(g, quantity.Length(d))) }
+	law := func(d float64) (float64, error) { return answer(WithGap(g, quantity.Length(d))) }
 	shortest, longest := reachOf(g, s)
 	if g.Medium != gap.Air && (g.Medium != gap.InGas || g.Filling() != gap.AirGas) {
 		all, err := stretches(shortest, longest, law)

@@ -98,7 +98,7 @@ const (
 // where a key is missing, none can.
 func nearest(g gap.Gap, ratio float64, stands string, of law) (gap.Answer[quantity.Voltage], error) {
 	at := func(d float64) (gap.Answer[quantity.Voltage], error) {
-		n := withGap(g, quantity.Length(d))
+		n := WithGap(g, quantity.Length(d))
 		n.Creepage = g.Creepage * quantity.Length(d) / g.Clearance
 		return of(n)
 	}
@@ -130,7 +130,7 @@ func asAir(g gap.Gap, sharp gap.Polarity) (gap.Answer[quantity.Voltage], error) 
 	if g.Shape == nil {
 		return gap.Answer[quantity.Voltage]{}, lack.Key("spacing.shape")
 	}
-	air := withGap(g, max(g.Clearance, 1e-3))
+	air := WithGap(g, max(g.Clearance, 1e-3))
 	air.Gas = gap.AirGas
 	a, err := Breakdown(air, sharp)
 	a.Because = "air, more than which " + named(g) + " does not stand: " + a.Because

@@ -31,13 +31,14 @@
 // problem for any circuit; the linear equations are solved by carrying changes
 // through the stored factors of the period (Saad and Schultz, SIAM J. Sci. Stat.
 // Comput. 7 (1986) 856). Where some diodes do not conduct yet Newton's method cannot be
-// believed: the state is led on in leaps of many periods, or by implicit steps in pseudo
-// time (Kelley and Keyes, SIAM J. Numer. Anal. 35 (1998) 508), or the search starts anew
-// with the diodes pressed to conduct. Where the drive is to hold a voltage both are sought
-// together: after each correction the drive is changed by what the voltage lacks, and the
-// state by what that does to the circuit between the peaks. The step control makes the period a continuous
-// function of its start, so that the charges come back to 1e-8 of what a diode
-// passes, at worst to 3e-7. Work is bounded; what is not reached is a lack. The network is
+// believed: the guess is made anew with the diodes pressed harder to conduct, the state is
+// led on in leaps of many periods, or by implicit steps in pseudo time (Kelley and Keyes,
+// SIAM J. Numer. Anal. 35 (1998) 508), or the search starts anew. Where the drive is to hold
+// a voltage both are sought together: after each correction the drive is changed by what
+// the voltage lacks, and the state by what that does to the circuit between the peaks. The
+// step control makes the period a continuous function of its start, so that the charges
+// come back to 1e-8 of what a diode passes, at worst to 3e-7, and to 1e-4 where no more is
+// asked for (Options.Swift). Work is bounded; what is not reached is a lack. The network is
 // passive and monotonic: the state is unique wherever something discharges it. Where
 // nothing does, it depends on history, and the state that a vanishing leakage of the
 // diodes would leave is given: a ladder that was once higher stays higher.

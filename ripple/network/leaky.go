@@ -40,7 +40,7 @@ func (r *reacher) allowance(c *circuit.Circuit) int { return 20000 + 200*len(c.E
 func (r *reacher) steady(c *circuit.Circuit, o Options) (*Periodic, error) {
 	o.Most = r.allowance(c) - r.spent.Steps
 	if o.Most <= 0 {
-		return nil, lack.Failed("the periodic state was not reached because the %d periods walked with ever less leakage lent to the diodes used up what a fault is allowed", r.spent.Periods)
+		return nil, lack.Failed("the periodic state was not reached because %d periods, with ever less leakage lent to the diodes, are all that a fault is allowed", r.spent.Periods)
 	}
 	o.work = &r.spent
 	return Steady(c, o)

@@ -19,7 +19,7 @@ func (s *search) unreached() error {
 // unrest is what still goes on in the period walked last.
 func (s *search) unrest() string {
 	if i := s.sleeper(); i >= 0 && len(s.linear.steps) > 0 {
-		return s.c.Elements[s.diodes[i].element].Name + " does not conduct, by which the balance of charges has others charged"
+		return s.c.Elements[s.diodes[i].element].Name + " does not conduct, though the balance of charges needs it to"
 	}
 	after := append([]float64(nil), s.from...)
 	axpy(1, s.start, after)

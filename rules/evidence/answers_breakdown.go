@@ -1,6 +1,7 @@
 package evidence
 
 import (
+	"cmp"
 	"fmt"
 	"slices"
 
@@ -23,15 +24,7 @@ func (e *Evidence) BreakdownAnswers(f *build.Arrangement, w Where, share quantit
 		all, err := answersFor(f, Weak{Stress: c.Stress, Where: w}, func(f *build.Arrangement, p Stress, w Where) (float64, error) {
 			return e.demandedBreakdown(f, p, w, share)
 		})
-		slices.SortStableFunc(all, func(a, b Answer) int {
-			switch x, y := a.change(), b.change(); {
-			case x < y:
-				return -1
-			case x > y:
-				return 1
-			}
-			return 0
-		})
+		slices.SortStableFunc(all, func(a, b Answer) int { return cmp.Compare(a.change(), b.change()) })
 		return all, err
 	})
 }

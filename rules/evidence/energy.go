@@ -152,7 +152,7 @@ func (e *Evidence) TouchCurrent(node string) (quantity.Current, error) {
 		if err != nil {
 			return 0, err
 		}
-		if e.onMains(node) {
+		if e.OnMains(node) {
 			v, err := e.Touched(node)
 			return quantity.Current(float64(v) / float64(measuring)), err
 		}

@@ -17,7 +17,7 @@ import (
 // tells only of its earthed side and counts where it is larger.
 func (e *Evidence) peakOver(a, b string) (quantity.Voltage, error) {
 	peak, err := e.Between(a, b)
-	if err != nil || !e.onMains(a) && !e.onMains(b) {
+	if err != nil || !e.OnMains(a) && !e.OnMains(b) {
 		return peak, err
 	}
 	stated, err := e.mainsPeak()
@@ -39,7 +39,7 @@ func (e *Evidence) Touched(node string) (quantity.Voltage, error) {
 // their squares add.
 func (e *Evidence) lastingOver(a, b string) (quantity.Voltage, error) {
 	rms, err := e.RMS(a, b)
-	if err != nil || !e.onMains(a) && !e.onMains(b) {
+	if err != nil || !e.OnMains(a) && !e.OnMains(b) {
 		return rms, err
 	}
 	stated, err := e.mainsPeak()
@@ -58,16 +58,13 @@ func (e *Evidence) lineVoltage() (quantity.Voltage, error) {
 	return e.chain.Site.Mains.V, nil
 }
 
-// OnMains reports whether a node is that of the mains, which no charge, energy or time ends.
-func (e *Evidence) OnMains(name string) bool { return e.onMains(name) }
-
 // Discharged are the nodes that discharge: all but the mains.
 func (e *Evidence) Discharged() []string {
-	return slices.DeleteFunc(slices.Clone(e.Nodes()), e.onMains)
+	return slices.DeleteFunc(slices.Clone(e.Nodes()), e.OnMains)
 }
 
-// onMains reports whether a node is that of the mains.
-func (e *Evidence) onMains(name string) bool {
+// OnMains reports whether a node is that of the mains, which no charge, energy or time ends.
+func (e *Evidence) OnMains(name string) bool {
 	return e.sameNode(name, mainsNode)
 }
 
@@ -81,7 +78,7 @@ func (e *Evidence) sameNode(a, b string) bool {
 func (e *Evidence) mains(s *chain.Spacing) *gap.Mains {
 	reached, secondary := false, false
 	for _, n := range nodesOf(s) {
-		line := e.onMains(n) || e.onMains(s.To.V)
+		line := e.OnMains(n) || e.OnMains(s.To.V)
 		driven := e.atDrive(n) || e.atDrive(s.To.V)
 		reached = reached || line || driven
 		secondary = secondary || driven && !line

@@ -110,18 +110,22 @@ func distance(e *evidence.Evidence, s *chain.Spacing, id string, given document.
 	f.Because += taken
 	f = shareOf(f, x)
 	f = f.Least(rule.Of(counted), rule.Of(need.Value), limits.DistanceMargin).Assume(need.Assumptions...).Assume(classTaken(s)...).Assume(transients(e, s, x, counted)...)
-	switch {
-	case f.Verdict == rule.Meets:
-	case assumedOnly(f, limits.DistanceMargin):
-		f.Remedy = confirm
-	default:
-		way := wider(s, given, need.Value+given.V-counted)
-		if id == "spacing.clearance" {
-			way = clearanceFor(e, s, x, way)
-		}
-		f.Remedy = alternatives(way, lowered(id, x), "lower the voltage")
+	if f.Verdict != rule.Meets {
+		f.Remedy = furtherApart(e, s, x, f, given, need.Value+given.V-counted)
 	}
 	return f
+}
+
+// furtherApart is what to do about a distance that is too short, or only assumed to do.
+func furtherApart(e *evidence.Evidence, s *chain.Spacing, x evidence.Spacing, f rule.Finding, given document.Given[quantity.Length], need quantity.Length) string {
+	if assumedOnly(f, limits.DistanceMargin) {
+		return confirm
+	}
+	way := wider(s, given, need)
+	if f.Rule == "spacing.clearance" {
+		way = clearanceFor(e, s, x, way)
+	}
+	return alternatives(way, lowered(f.Rule, x), "lower the voltage")
 }
 
 // transients is what is taken for granted of those of the mains.

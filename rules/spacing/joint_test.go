@@ -29,45 +29,66 @@ func metAfter(t *testing.T, text, remedy, radius string) map[string]rule.Finding
 	return nil
 }
 
+// shapedGap is a description with one spacing in oil, vacuum or a solid.
+func shapedGap(medium, kind string, volts, clearance, radius float64) (text, sizeKey string) {
+	sizeKey = map[string]string{"rounded edge": "edge_radius"}[kind]
+	if sizeKey == "" {
+		sizeKey = "radius"
+	}
+	text = site(310) + fmt.Sprintf("[[spacing]]\nname = \"g\"\nvoltage = \"%.6g kV\"\nmedium = %q\nclearance = %s\nshape = { kind = %q, %s = %s }\n",
+		volts, medium, mm(clearance), kind, sizeKey, mm(radius))
+	switch medium {
+	case "solid":
+		text += "material = \"alumina\"\n"
+	case "vacuum":
+		text += "finish = \"polished\"\nconditioned = true\nstressed_area = \"80 mm2\"\n"
+	}
+	return text, sizeKey
+}
+
+// served counts the remedies of clearance and breakdown that name one size, each of which
+// has to serve both rules; a remedy that names none has to say so.
+func served(t *testing.T, fatalf func(string, ...any), text, sizeKey string) (sizes int) {
+	t.Helper()
+	before, both := findings(t, text), []string{"spacing.clearance | g", "spacing.breakdown | g"}
+	for _, of := range both {
+		f := before[of]
+		if f.Verdict != rule.Fails || strings.Contains(f.Remedy, "no one size") {
+			continue
+		}
+		after := metAfter(t, text, f.Remedy, sizeKey)
+		if after == nil {
+			fatalf("%s: neither a size nor why there is none: %s\n%s", of, f.Remedy, text)
+		}
+		sizes++
+		for _, other := range both {
+			if is := after[other]; is.Margin == nil || *is.Margin < is.Stated-1e-6 {
+				fatalf("%s says %q; after it %s: %s, %v, %s\n%s", of, f.Remedy, other, is.Verdict, is.Margin, is.Because, text)
+			}
+		}
+	}
+	return sizes
+}
+
 // One size that a remedy of clearance or breakdown names serves both rules, in oil, vacuum
 // and solids, where the working stress asks for the distance; where none does, that is said.
 func TestOneSizeServesBothRules(t *testing.T) {
-	served := map[string]int{}
 	rapid.Check(t, func(rt *rapid.T) {
-		medium := rapid.SampledFrom([]string{"oil", "vacuum", "solid"}).Draw(rt, "medium")
-		kind := rapid.SampledFrom([]string{"rounded edge", "sphere-plane", "cylinder-plane"}).Draw(rt, "shape")
-		radius := map[string]string{"rounded edge": "edge_radius", "sphere-plane": "radius", "cylinder-plane": "radius"}[kind]
-		text := site(310) + fmt.Sprintf("[[spacing]]\nname = \"g\"\nvoltage = \"%.6g kV\"\nmedium = %q\nclearance = %s\nshape = { kind = %q, %s = %s }\n",
-			rapid.Float64Range(2, 60).Draw(rt, "voltage"), medium, mm(rapid.Float64Range(0.5, 40).Draw(rt, "clearance")), kind, radius, mm(rapid.Float64Range(0.1, 20).Draw(rt, "radius")))
-		switch medium {
-		case "solid":
-			text += "material = \"alumina\"\n"
-		case "vacuum":
-			text += "finish = \"polished\"\nconditioned = true\nstressed_area = \"80 mm2\"\n"
-		}
-		before := findings(t, text)
-		for _, of := range []string{"spacing.clearance | g", "spacing.breakdown | g"} {
-			f := before[of]
-			if f.Verdict != rule.Fails {
-				continue
-			}
-			after := metAfter(t, text, f.Remedy, radius)
-			if after == nil || strings.Contains(f.Remedy, "no one size") {
-				if !strings.Contains(f.Remedy, "no one size") {
-					rt.Fatalf("%s: neither a size nor why there is none: %s\n%s", of, f.Remedy, text)
-				}
-				continue
-			}
-			served[medium]++
-			for _, rule2 := range []string{"spacing.clearance | g", "spacing.breakdown | g"} {
-				if is := after[rule2]; is.Margin == nil || *is.Margin < is.Stated-1e-6 {
-					rt.Fatalf("%s says %q; after it %s: %s, %v, %s\n%s", of, f.Remedy, rule2, is.Verdict, is.Margin, is.Because, text)
-				}
-			}
-		}
+		text, sizeKey := shapedGap(
+			rapid.SampledFrom([]string{"oil", "vacuum", "solid"}).Draw(rt, "medium"),
+			rapid.SampledFrom([]string{"rounded edge", "sphere-plane", "cylinder-plane"}).Draw(rt, "shape"),
+			rapid.Float64Range(2, 60).Draw(rt, "voltage"),
+			rapid.Float64Range(0.5, 40).Draw(rt, "clearance"),
+			rapid.Float64Range(0.1, 20).Draw(rt, "radius"))
+		served(t, rt.Fatalf, text, sizeKey)
 	})
-	for _, medium := range []string{"oil", "vacuum", "solid"} {
-		if served[medium] == 0 {
+}
+
+// In each of the three media there are sizes that serve.
+func TestASizeThatServesIsNamed(t *testing.T) {
+	for medium, volts := range map[string]float64{"oil": 10, "vacuum": 40, "solid": 5} {
+		text, sizeKey := shapedGap(medium, "sphere-plane", volts, 1, 20)
+		if served(t, t.Fatalf, text, sizeKey) == 0 {
 			t.Errorf("no remedy in %s named a size", medium)
 		}
 	}

@@ -47,7 +47,7 @@ func (p *Periodic) sober() error {
 
 // rounding is the power that rounding alone may leave, however little the rest is: of
 // the energy that the largest capacitance swings with, over hundreds of steps, and of the
-// current of the steepest diode, whose voltage and drop are known to 52 bits.
+// current of the steepest diode or inductance, whose voltage and drop are known to 52 bits.
 func (p *Periodic) rounding() float64 {
 	const least = 1e-30 // W: a circuit without a source rests at what is left of numbers
 	peak, roomiest, steepest := 0.0, 0.0, 0.0
@@ -55,6 +55,9 @@ func (p *Periodic) rounding() float64 {
 		e := &p.Circuit.Elements[i]
 		peak = max(peak, float64(e.Wave.Amplitude), float64(e.Rectifier.Drop))
 		roomiest = max(roomiest, float64(e.Capacitance))
+		if e.Inductance > 0 {
+			steepest = max(steepest, 1/(float64(e.Resistance)+float64(e.Inductance)*float64(p.Frequency)))
+		}
 	}
 	for i := range p.track.diodes {
 		steepest = max(steepest, p.track.diodes[i].on)

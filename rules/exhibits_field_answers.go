@@ -22,7 +22,11 @@ func answerTables(e *evidence.Evidence) (all []exhibit.Table) {
 			Note:    "At " + quantity.Text(weak.Strength) + ", r " + quantity.Text(weak.At.R) + ", z " + quantity.Text(weak.At.Z) + "; all other dimensions and the voltages kept. Solved again for each.",
 		}
 		for _, a := range answers {
-			t.Rows = append(t.Rows, []exhibit.Cell{exhibit.Words(a.Name), exhibit.Number(a.Value), exhibit.Exponent(a.Power), exhibit.OrWords(a.Needed, a.Err)})
+			now, power := exhibit.Number(a.Value), exhibit.Exponent(a.Power)
+			if !(a.Value > 0) {
+				now, power = exhibit.Words("sharp"), exhibit.Words("–")
+			}
+			t.Rows = append(t.Rows, []exhibit.Cell{exhibit.Words(a.Name), now, power, exhibit.OrWords(a.Needed, a.Err)})
 		}
 		all = append(all, t)
 	}

@@ -12,8 +12,8 @@ import (
 )
 
 // Described is an arrangement as it is described. Its dimensions are the size of the
-// whole drawing, the radii of edges rounded between two straight pieces, and what moving a
-// part of it along or across the axis changes.
+// whole drawing, the radii of edges between two straight pieces, sharp or rounded, and what
+// moving a part of it along or across the axis changes.
 func Described(f *chain.Field) *Arrangement {
 	a := &Arrangement{Field: *f}
 	if size := sizeOf(f); size > 0 {
@@ -28,7 +28,7 @@ func Described(f *chain.Field) *Arrangement {
 			}
 		}
 	}
-	a.Dimensions = append(a.Dimensions, movedDimensions(f)...)
+	a.Dimensions = append(append(a.Dimensions, sharpEdges(f)...), movedDimensions(f)...)
 	return a
 }
 

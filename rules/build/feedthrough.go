@@ -193,8 +193,10 @@ func (b throughBuilder) dimensions(d throughSizes) (all []Dimension) {
 		}
 		return b.arrangement(other)
 	}})
-	if d.edge > 0 {
-		add("edge radius of the hole", b.Hole.EdgeRadius.Key, func(d *throughSizes) *quantity.Length { return &d.edge })
+	add("edge radius of the hole", b.Hole.EdgeRadius.Key, func(d *throughSizes) *quantity.Length { return &d.edge })
+	if !(d.edge > 0) {
+		corner := complex(float64(d.hole), float64(d.half))
+		all[len(all)-1].Near = &corner
 	}
 	if d.outer > 0 && d.bore > d.pin {
 		add("bore of the sleeve", b.Sleeve.InnerRadius.Key, func(d *throughSizes) *quantity.Length { return &d.bore })

@@ -76,7 +76,7 @@ func places(f *chain.Field) (list []string) {
 		for _, s := range strokes {
 			for _, p := range [][]quantity.Length{s.From.V, s.To.V, s.Centre.V} {
 				if len(p) == 2 {
-					list = append(list, fmt.Sprintf("%.4g,%.4g", float64(p[0])*1e3, float64(p[1])*1e3))
+					list = append(list, mmPoint(p))
 				}
 			}
 		}
@@ -91,6 +91,10 @@ func places(f *chain.Field) (list []string) {
 		add(b.Profile)
 	}
 	return list
+}
+
+func mmPoint(p []quantity.Length) string {
+	return fmt.Sprintf("%.4g,%.4g", float64(p[0])*1e3, float64(p[1])*1e3)
 }
 
 // A dimension changed moves what hangs together and leaves the rest where it was.
@@ -145,19 +149,61 @@ func TestMovesOfADrawing(t *testing.T) {
 	}
 }
 
-// The present value of every dimension is the drawing as it is, and no half of one is.
+// The present value of every dimension is the drawing as it is, and no other one is.
 func TestDimensionsAreThoseOfTheDrawing(t *testing.T) {
 	for _, text := range []string{rodGap, sleeved, frustum, chamfered, cone} {
 		f := drawn(t, text)
 		was := strings.Join(places(f), " ")
 		for _, d := range build.Described(f).Dimensions {
-			a, half := d.With(d.Value), d.With(d.Value*0.9)
+			a, other := d.With(d.Value), d.With(d.Value*0.9)
+			if d.Value == 0 { // a sharp edge
+				other = d.With(0.1e-3)
+			}
 			if got := strings.Join(places(&a.Field), " "); a.Err != nil || got != was {
 				t.Errorf("%s: %v: %s, was %s", d.Name, a.Err, got, was)
 			}
-			if strings.Join(places(&half.Field), " ") == was {
+			if strings.Join(places(&other.Field), " ") == was {
 				t.Errorf("%s changes nothing", d.Name)
 			}
+		}
+	}
+}
+
+// A sharp edge is rounded by an arc that touches both straight pieces, to the side to which
+// the outline turns.
+func TestASharpEdgeIsRounded(t *testing.T) {
+	for _, c := range []struct {
+		edge string
+		want []string // end of the first piece, end and centre of the arc, in mm, and its turn
+	}{
+		{"edge radius of can at r 150 mm, z 0 m", []string{"148,0", "150,2", "148,2", "left"}},
+		{"edge radius of plate at r 10 mm, z 4 mm", []string{"10,3.172", "10.59,4.586", "12,3.172", "right"}},
+	} {
+		text := rodGap
+		if strings.Contains(c.edge, "plate") {
+			text = chamfered
+		}
+		all := build.Described(drawn(t, text)).Dimensions
+		i := slices.IndexFunc(all, func(d build.Dimension) bool { return d.Name == c.edge })
+		if i < 0 {
+			t.Errorf("no %s", c.edge)
+			continue
+		}
+		a := all[i].With(2e-3)
+		found := false
+		for _, el := range a.Electrodes {
+			for k, s := range el.Profile {
+				if s.Centre.Set() && k > 1 {
+					got := []string{mmPoint(el.Profile[k-1].To.V), mmPoint(s.To.V), mmPoint(s.Centre.V), s.Turn.V}
+					found = found || slices.Equal(got, c.want)
+				}
+			}
+		}
+		if !found || a.Err != nil {
+			t.Errorf("%s: no arc %v (%v): %v", c.edge, c.want, a.Err, places(&a.Field))
+		}
+		if all[i].With(1).Err == nil {
+			t.Errorf("%s of a metre", c.edge)
 		}
 	}
 }

@@ -1,18 +1,15 @@
 package evidence
 
 import (
+	"cmp"
 	"fmt"
-	"math"
 	"math/cmplx"
+	"slices"
 
 	"kilovet/hv/lack"
 	"kilovet/hv/parallel"
 	"kilovet/hv/profile"
 	"kilovet/hv/quantity"
-	"kilovet/insulation"
-	"kilovet/insulation/field"
-	"kilovet/insulation/gap"
-	"kilovet/insulation/vacuum"
 	"kilovet/rules/build"
 )
 
@@ -24,14 +21,9 @@ type Answer struct {
 	Err    error           // why there is none; also where the rule is met already
 }
 
-// Bounds of a search for a dimension: solutions, and how far from the present value.
 const (
-	mostTries    = 4
-	resizedMost  = 4.0
-	littleStep   = 1.02
-	leastPower   = 0.03
-	mostMoves    = 6    // dimensions of a described arrangement that are tried
-	justMet      = 0.97 // of what is allowed, from which a dimension serves
+	mostMoves    = 6                 // dimensions of a described arrangement that are tried
+	besideEdge   = 10 * EdgeDistance // where what is judged is judged for an edge
 	nothingAsked = "the rule is met"
 )
 
@@ -46,27 +38,79 @@ func (e *Evidence) Answers(f *build.Arrangement) ([]Answer, error) {
 		if weak.Field == nil || !(weak.Strength > 0) {
 			return nil, lack.Failed("no weakest point is known")
 		}
-		return answersFor(f, weak, e.demanded)
+		return answersFor(f, weak.setting(), weak.At, atPlace(weak.Where, e.demanded))
 	})
+}
+
+// PlaceAnswers are those for the greatest field at any place, the least change first.
+func (e *Evidence) PlaceAnswers(f *build.Arrangement, w Where) ([]Answer, error) {
+	return remember(e.Under(Condition{}), fmt.Sprintf("answers %s %v", f.Name.V, w), func() ([]Answer, error) {
+		p, err := e.Stress(f, w)
+		if err != nil {
+			return nil, err
+		}
+		return leastFirst(answersFor(f, p.setting(), p.At, atPlace(w, e.demanded)))
+	})
+}
+
+// leastFirst sorts answers by how much they change.
+func leastFirst(all []Answer, err error) ([]Answer, error) {
+	slices.SortStableFunc(all, func(a, b Answer) int { return cmp.Compare(a.change(), b.change()) })
+	return all, err
+}
+
+// change is how much a dimension changes, as a length; endless where there is no answer.
+func (a Answer) change() quantity.Length {
+	const endless = 1e9
+	if a.Err != nil {
+		return endless
+	}
+	return max(a.Needed-a.Value, a.Value-a.Needed)
+}
+
+// measure is the field at the place that is asked for, and over what a rule allows there.
+type measure func(*build.Arrangement, fieldCase) (tried, error)
+
+// tried is what an arrangement, perhaps with another dimension, has at a place.
+type tried struct {
+	strength quantity.Field
+	demand   float64 // of what is allowed
 }
 
 // demand is a field over what a rule allows there.
 type demand func(*build.Arrangement, Stress, Where) (float64, error)
 
-// answersFor are those of all dimensions for a place and what is asked of it.
-func answersFor(f *build.Arrangement, weak Weak, of demand) ([]Answer, error) {
-	asked, err := of(f, weak.Stress, weak.Where)
+// atPlace measures the greatest field somewhere.
+func atPlace(w Where, of demand) measure {
+	return func(f *build.Arrangement, c fieldCase) (tried, error) {
+		p, err := w.find(c.Field)
+		if err != nil {
+			return tried{}, err
+		}
+		asked, err := of(f, Stress{p, c.Field, c.Under, c.Settled, c.potentials}, w)
+		return tried{p.Strength, asked}, err
+	}
+}
+
+// setting is the field that a greatest field stands in.
+func (s Stress) setting() fieldCase {
+	return fieldCase{Field: s.Field, Under: s.Under, Settled: s.Settled, potentials: s.potentials}
+}
+
+// answersFor are those of all dimensions near a place for what is measured there.
+func answersFor(f *build.Arrangement, c fieldCase, at profile.Point, by measure) ([]Answer, error) {
+	now, err := by(f, c)
 	if err != nil {
 		return nil, err
 	}
-	list := nearest(f.Dimensions, weak.At)
+	list := nearest(f.Dimensions, at)
 	all := make([]Answer, len(list))
-	parallel.Each(len(list), func(i int) { all[i] = answer(list[i], weak, asked, of) })
+	parallel.Each(len(list), func(i int) { all[i] = answer(list[i], c, now, by) })
 	return all, nil
 }
 
 // nearest leaves out the dimensions of a described arrangement that lie farthest from
-// the weakest point, and those of no length.
+// the weakest point, and sharp edges that are not where it is.
 func nearest(all []build.Dimension, at profile.Point) (list []build.Dimension) {
 	far := func(d build.Dimension) float64 {
 		if d.Near == nil {
@@ -74,6 +118,9 @@ func nearest(all []build.Dimension, at profile.Point) (list []build.Dimension) {
 		}
 		return cmplx.Abs(*d.Near - complex(float64(at.R), float64(at.Z)))
 	}
+	all = slices.DeleteFunc(slices.Clone(all), func(d build.Dimension) bool {
+		return !(d.Value > 0) && !(d.Near != nil && far(d) <= float64(besideEdge))
+	})
 	for _, d := range all {
 		closer := 0
 		for _, other := range all {
@@ -81,128 +128,11 @@ func nearest(all []build.Dimension, at profile.Point) (list []build.Dimension) {
 				closer++
 			}
 		}
-		if d.Value > 0 && (d.Near == nil || closer < mostMoves) {
+		if d.Near == nil || closer < mostMoves {
 			list = append(list, d)
 		}
 	}
 	return list
-}
-
-// tried is an arrangement with another dimension.
-type tried struct {
-	strength quantity.Field
-	demand   float64 // of what is allowed
-}
-
-func answer(d build.Dimension, weak Weak, asked float64, of demand) Answer {
-	a := Answer{Dimension: d}
-	v := d.Value * littleStep
-	t, err := try(d, v, weak, (*field.Solution).Moved, field.Fine, of)
-	if err != nil {
-		v = d.Value / littleStep
-		if t, err = try(d, v, weak, (*field.Solution).Moved, field.Fine, of); err != nil {
-			a.Err = err
-			return a
-		}
-	}
-	way := math.Log(float64(v / d.Value))
-	a.Power = math.Log(float64(t.strength/weak.Strength)) / way
-	power := math.Log(t.demand/asked) / way
-	switch {
-	case asked <= 1:
-		a.Err = lack.Failed(nothingAsked)
-	case math.Abs(power) < leastPower:
-		a.Err = lack.Failed("it changes too little")
-	default:
-		a.Needed, a.Err = search(d, weak, asked, power, of)
-	}
-	return a
-}
-
-// search goes by the power law and corrects it by what the solutions give.
-func search(d build.Dimension, weak Weak, asked, power float64, of demand) (quantity.Length, error) {
-	last, demand := float64(d.Value), asked
-	for range mostTries {
-		aim := math.Sqrt(justMet) // between what serves and what is allowed
-		next := last * math.Pow(aim/demand, 1/power)
-		if !(next < resizedMost*float64(d.Value) && next > float64(d.Value)/resizedMost) {
-			return 0, lack.Range("not even a fourth or four times as much is enough")
-		}
-		t, err := try(d, quantity.Length(next), weak, (*field.Solution).MovedFar, field.Rough, of)
-		if err != nil {
-			return 0, err
-		}
-		if t.demand <= 1 && t.demand >= justMet*justMet {
-			return quantity.Length(next), nil
-		}
-		if p := math.Log(t.demand/demand) / math.Log(next/last); math.Abs(p) > leastPower && p*power > 0 {
-			power = p
-		}
-		last, demand = next, t.demand
-	}
-	return 0, lack.Failed("not found within %d solutions", mostTries)
-}
-
-// mover is a way to the field of outlines with other lengths.
-type mover func(*field.Solution, field.Arrangement, field.Aim) (*field.Solution, error)
-
-// try solves an arrangement with another dimension under the same voltages.
-func try(d build.Dimension, v quantity.Length, weak Weak, by mover, aim field.Aim, of demand) (tried, error) {
-	f := d.With(v)
-	s, err := solveBy(f, func(a field.Arrangement) (*field.Solution, error) { return by(weak.Field.Solution, a, aim) })
-	if err != nil {
-		return tried{}, err
-	}
-	at, err := s.Under(weak.potentials)
-	if err != nil {
-		return tried{}, err
-	}
-	p, err := weak.Where.find(at)
-	if err != nil {
-		return tried{}, err
-	}
-	stress := Stress{Peak: p, Field: at, Under: weak.Under, Settled: weak.Settled, potentials: weak.potentials}
-	asked, err := of(f, stress, weak.Where)
-	return tried{p.Strength, asked}, err
-}
-
-// demanded is a field over what its rule allows there.
-func (e *Evidence) demanded(f *build.Arrangement, p Stress, w Where) (float64, error) {
-	if !Open(f, p.Body) {
-		return e.demandedSolid(f, p)
-	}
-	g := e.Filling(f, p.Body)
-	if g.Medium == gap.Vacuum {
-		return float64(p.Strength / vacuum.EmissionField), nil
-	}
-	limit, _, err := insulation.Ionising(g)
-	if err != nil || p.Strength <= limit {
-		return float64(p.Strength / limit), err
-	}
-	traced, err := p.Field.Within(p.Peak)
-	if err != nil {
-		return 0, err
-	}
-	l, reversed, err := lineOf(traced)
-	if err != nil {
-		return 0, err
-	}
-	volts, polarity := across(traced, w, f)
-	onset, err := insulation.StrengthAlong(g, l, sharpEnd(polarity, reversed)).Onset.Get()
-	return float64(volts / onset), err
-}
-
-func (e *Evidence) demandedSolid(f *build.Arrangement, p Stress) (float64, error) {
-	for i := range f.Dielectrics {
-		if d := &f.Dielectrics[i]; d.Name.V == p.Body {
-			u, err := useOf(p, d)
-			if err != nil {
-				return 0, err
-			}
-			return float64(p.Strength / u.allowed()), nil
-		}
-	}
-	return 0, lack.Failed("there is no %s", p.Body)
 }
 
 // Text says what to do, empty where nothing helps.
@@ -210,5 +140,9 @@ func (a Answer) Text() string {
 	if a.Err != nil {
 		return ""
 	}
-	return fmt.Sprintf("%s of %s in place of %s", a.Name, quantity.Text(a.Needed), quantity.Text(a.Value))
+	was := quantity.Text(a.Value)
+	if !(a.Value > 0) {
+		was = "a sharp edge"
+	}
+	return fmt.Sprintf("%s of %s in place of %s", a.Name, quantity.Text(a.Needed), was)
 }

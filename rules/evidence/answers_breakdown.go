@@ -1,9 +1,7 @@
 package evidence
 
 import (
-	"cmp"
 	"fmt"
-	"slices"
 
 	"kilovet/hv/lack"
 	"kilovet/hv/quantity"
@@ -21,21 +19,10 @@ func (e *Evidence) BreakdownAnswers(f *build.Arrangement, w Where, share quantit
 		if err != nil {
 			return nil, err
 		}
-		all, err := answersFor(f, Weak{Stress: c.Stress, Where: w}, func(f *build.Arrangement, p Stress, w Where) (float64, error) {
+		return leastFirst(answersFor(f, c.Stress.setting(), c.Stress.At, atPlace(w, func(f *build.Arrangement, p Stress, w Where) (float64, error) {
 			return e.demandedBreakdown(f, p, w, share)
-		})
-		slices.SortStableFunc(all, func(a, b Answer) int { return cmp.Compare(a.change(), b.change()) })
-		return all, err
+		})))
 	})
-}
-
-// change is how much a dimension changes, as a length; endless where there is no answer.
-func (a Answer) change() quantity.Length {
-	const endless = 1e9
-	if a.Err != nil {
-		return endless
-	}
-	return max(a.Needed-a.Value, a.Value-a.Needed)
 }
 
 // demandedBreakdown is the voltage along the critical line over a share of the breakdown

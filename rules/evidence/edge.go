@@ -42,6 +42,8 @@ type EdgeStress struct {
 	Polarity gap.Polarity
 	Under    Condition
 	Settled  bool
+
+	in fieldCase
 }
 
 // Text says under what it stands, in words.
@@ -62,15 +64,13 @@ func (e *Evidence) AtEdge(f *build.Arrangement, edge field.Edge, distance quanti
 			if !there {
 				continue
 			}
-			readings, err := c.Field.Near(same, distance)
+			r, any, err := strongest(f, c, same, distance)
 			if err != nil {
 				return EdgeStress{}, err
 			}
-			for _, r := range readings {
-				if Open(f, r.Body) && (!found || r.Strength() > most.Strength) {
-					most = EdgeStress{r, r.Strength(), same.Exponent, polarityAt(c, same), c.Under, c.Settled}
-					found = true
-				}
+			if any && (!found || r.Strength() > most.Strength) {
+				most = EdgeStress{r, r.Strength(), same.Exponent, polarityAt(c, same), c.Under, c.Settled, c}
+				found = true
 			}
 		}
 		if !found {

@@ -2,7 +2,6 @@ package fields
 
 import (
 	"fmt"
-	"strings"
 
 	"kilovet/hv/quantity"
 	"kilovet/insulation/field"
@@ -73,17 +72,14 @@ func short(f rule.Finding) bool {
 	return f.Margin != nil && !quantity.AtLeast(1+*f.Margin, 1+f.Stated)
 }
 
-// mostNamed is how many dimensions a remedy names.
-const mostNamed = 3
-
 // oneDimension names the least changes of one dimension with which the voltage is the
 // comfortable share of the breakdown, else those with which it is the share that may be used,
 // or why there is none.
 func oneDimension(e *evidence.Evidence, f *build.Arrangement, w evidence.Where, fails bool) string {
 	const lower = ", or lower the voltage"
-	enough, not, err := namedDimensions(e, f, w, limits.BreakdownComfort)
+	enough, not, err := namedDimensions(e.BreakdownAnswers(f, w, limits.BreakdownComfort))
 	if enough == "" && fails && err == nil && not != "" {
-		if least, _, _ := namedDimensions(e, f, w, limits.BreakdownShare); least != "" {
+		if least, _, _ := namedDimensions(e.BreakdownAnswers(f, w, limits.BreakdownShare)); least != "" {
 			return "one of these is just enough, none for comfort: " + least + lower
 		}
 	}
@@ -96,21 +92,6 @@ func oneDimension(e *evidence.Evidence, f *build.Arrangement, w evidence.Where, 
 		return "no one dimension is enough, change several (" + not + ")" + lower
 	}
 	return "widen the gap or round its electrodes; its outline has no dimension that could be changed alone" + lower
-}
-
-// namedDimensions are the least changes of which each alone is enough, and why others are
-// not.
-func namedDimensions(e *evidence.Evidence, f *build.Arrangement, w evidence.Where, share quantity.Fraction) (enough, not string, err error) {
-	answers, err := e.BreakdownAnswers(f, w, share)
-	var are, no []string
-	for _, a := range answers {
-		if text := a.Text(); text == "" {
-			no = append(no, a.Name+": "+a.Err.Error())
-		} else if len(are) < mostNamed {
-			are = append(are, text)
-		}
-	}
-	return strings.Join(are, ", or "), strings.Join(no, "; "), err
 }
 
 // judgeBreakdown judges one critical line; none that an insulator closes, and none of

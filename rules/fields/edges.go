@@ -82,12 +82,13 @@ func meets(f *build.Arrangement, bodies []string) bool {
 }
 
 func judgeEdges(e *evidence.Evidence, f *build.Arrangement, s *field.Solution, start rule.Finding, counts func(field.Edge) bool) (all []rule.Finding) {
+	var edges []field.Edge
 	for _, x := range s.Edges() {
 		if counts(x) {
-			all = append(all, judgeEdge(e, f, x, start))
+			all, edges = append(all, judgeEdge(e, f, x, start)), append(edges, x)
 		}
 	}
-	return all
+	return sized(all, func(i int) ([]evidence.Answer, error) { return e.EdgeAnswers(f, edges[i]) })
 }
 
 func judgeEdge(e *evidence.Evidence, f *build.Arrangement, x field.Edge, finding rule.Finding) rule.Finding {

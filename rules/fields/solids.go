@@ -42,12 +42,14 @@ profile = [{ from = ["4 mm", "60 mm"]`}},
 	},
 	Judge: func(e *evidence.Evidence) rule.Judgement {
 		return each(e, "field.solid", "no insulator lies in a computed field", func(f *build.Arrangement, _ *field.Solution, start rule.Finding) (all []rule.Finding) {
+			var places []evidence.Where
 			for i := range f.Dielectrics {
 				if d := &f.Dielectrics[i]; !d.Fill.Set() {
 					all = append(all, judgeSolid(e, f, d, start))
+					places = append(places, e.ClearOfEdges(f, evidence.Where{Body: d.Name.V}))
 				}
 			}
-			return all
+			return sized(all, func(i int) ([]evidence.Answer, error) { return e.PlaceAnswers(f, places[i]) })
 		})
 	},
 }

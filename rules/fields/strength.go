@@ -2,7 +2,6 @@ package fields
 
 import (
 	"fmt"
-	"strings"
 
 	"kilovet/hv/lack"
 	"kilovet/hv/quantity"
@@ -51,25 +50,26 @@ var strength = rule.Rule{
 
 // judgeStrength judges each electrode of an arrangement, and in gas each bare insulator.
 func judgeStrength(e *evidence.Evidence, f *build.Arrangement, s *field.Solution, start rule.Finding) (all []rule.Finding) {
+	var places []evidence.Where
+	judge := func(subject string, w evidence.Where, body string) {
+		one := start
+		one.Subject = subject
+		w = e.ClearOfEdges(f, w)
+		all, places = append(all, judgePlace(e, f, w, body, one)), append(places, w)
+	}
 	for _, name := range s.Electrodes() {
 		for _, body := range facing(f, s, name) {
-			one := start
-			one.Subject = subject(f, name, body)
-			all = append(all, judgePlace(e, f, e.ClearOfEdges(f, evidence.Where{Electrode: name, Body: body}), body, one))
+			judge(subject(f, name, body), evidence.Where{Electrode: name, Body: body}, body)
 		}
 	}
-	if f.Medium.V != "air" && f.Medium.V != "gas" {
-		return all
-	}
-	for _, name := range s.Bare() {
-		if evidence.Open(f, name) {
-			continue
+	if f.Medium.V == "air" || f.Medium.V == "gas" {
+		for _, name := range s.Bare() {
+			if !evidence.Open(f, name) {
+				judge(subject(f, name, field.Medium), evidence.Where{Beside: name}, field.Medium)
+			}
 		}
-		one := start
-		one.Subject = subject(f, name, field.Medium)
-		all = append(all, judgePlace(e, f, e.ClearOfEdges(f, evidence.Where{Beside: name}), field.Medium, one))
 	}
-	return all
+	return sized(all, func(i int) ([]evidence.Answer, error) { return e.PlaceAnswers(f, places[i]) })
 }
 
 func judgePlace(e *evidence.Evidence, f *build.Arrangement, w evidence.Where, body string, finding rule.Finding) rule.Finding {
@@ -84,9 +84,6 @@ func judgePlace(e *evidence.Evidence, f *build.Arrangement, w evidence.Where, bo
 	switch g := e.Filling(f, body); g.Medium {
 	case "vacuum":
 		finding.Sources = []rule.Source{emissionSource, comfortSource}
-		if p.Strength > vacuum.EmissionField {
-			finding.Remedy = answered(e, f, w, finding.Remedy)
-		}
 		return finding.Most(rule.Of(p.Strength), rule.Of(vacuum.EmissionField), float64(vacuum.EmissionField/vacuum.ComfortableField)-1).WithoutRemedyIfMet()
 	case "air", "gas":
 		return judgeInGas(e, f, w, p, finding)
@@ -138,7 +135,6 @@ func judgeInGas(e *evidence.Evidence, f *build.Arrangement, w evidence.Where, p 
 	if finding.Verdict != rule.Fails {
 		return finding.WithoutRemedyIfMet()
 	}
-	finding.Remedy = answered(e, f, w, finding.Remedy)
 	if c.Traced.Closed || w.Beside != "" {
 		finding.Because += "; the sparks end on an insulator and eat it"
 		return finding
@@ -146,27 +142,4 @@ func judgeInGas(e *evidence.Evidence, f *build.Arrangement, w evidence.Where, p 
 	finding.Because += "; corona, which does not cross the gap by itself"
 	finding.Verdict = rule.Marginal
 	return finding
-}
-
-// answered is a remedy with the smallest change of each dimension that meets the rule,
-// at the weakest point of an arrangement.
-func answered(e *evidence.Evidence, f *build.Arrangement, w evidence.Where, remedy string) string {
-	weak, err := e.Weakest(f)
-	if err != nil || weak.Where.Electrode != w.Electrode || weak.Where.Body != w.Body || weak.Where.Beside != w.Beside {
-		return remedy
-	}
-	answers, err := e.Answers(f)
-	if err != nil {
-		return remedy
-	}
-	var enough []string
-	for _, a := range answers {
-		if text := a.Text(); text != "" {
-			enough = append(enough, text)
-		}
-	}
-	if len(enough) == 0 {
-		return remedy
-	}
-	return remedy + "; one of these is enough: " + strings.Join(enough, ", or ")
 }

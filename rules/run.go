@@ -92,7 +92,9 @@ func judged(e *evidence.Evidence, f family, r rule.Rule) rule.Judgement {
 	if e.Leaves(f.name) {
 		return rule.Over(omitted)
 	}
-	return r.Judge(e)
+	j := r.Judge(e)
+	j.Findings = onSupply(j.Findings, unsaid(e.Chain()))
+	return j
 }
 
 func (r *Review) take(rl rule.Rule, j rule.Judgement) {

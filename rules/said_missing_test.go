@@ -1,6 +1,7 @@
 package rules_test
 
 import (
+	"regexp"
 	"slices"
 	"strings"
 	"testing"
@@ -53,6 +54,30 @@ func TestNoNegativePartOfADrop(t *testing.T) {
 	for _, f := range reviewed(t, described(t, "column")).Figures {
 		if f.ID == "potential" && f.Subject == "drive" && f.Value != 0 {
 			t.Errorf("the drive stands at %g V in the mean", f.Value)
+		}
+	}
+}
+
+// What every state takes for granted about the supply is said by each finding that rests on
+// one, and none of those is met then.
+func TestAnUnsaidSupplyIsAnAssumption(t *testing.T) {
+	for key, line := range map[string]string{
+		"drive.waveform": `(?m)^waveform .*\n`, "multiplier.topology": `(?m)^topology .*\n`,
+	} {
+		text := regexp.MustCompile(line).ReplaceAllString(string(described(t, "column")), "")
+		rests := 0
+		for _, f := range reviewed(t, []byte(text)).Findings {
+			told := slices.ContainsFunc(f.Assumptions, func(a string) bool { return strings.HasSuffix(a, key+" is not given") })
+			if f.Under == "" {
+				continue
+			}
+			rests++
+			if !told || f.Verdict == rule.Meets || f.Remedy == "" {
+				t.Errorf("without %s: %s of %s: %s, %v, remedy %q", key, f.Rule, f.Subject, f.Verdict, f.Assumptions, f.Remedy)
+			}
+		}
+		if rests < 80 {
+			t.Errorf("without %s: %d findings under a state", key, rests)
 		}
 	}
 }

@@ -12,6 +12,12 @@ import (
 // rodAt is a rod with a half ball of a radius at its end, so far over the floor of a can
 // in vacuum, all in millimetres.
 func rodAt(radius, gap, can, volts float64) []byte {
+	ball := fmt.Sprintf(`{ from = ["0 mm", "%[2]g mm"] }, { to = ["%[1]g mm", "%[3]g mm"], centre = ["0 mm", "%[3]g mm"], turn = "left" }`, radius, gap, gap+radius)
+	return rodEnding(ball, radius, can, volts)
+}
+
+// rodEnding is a rod with any end in a can.
+func rodEnding(end string, radius, can, volts float64) []byte {
 	return fmt.Appendf(nil, `format = 1
 title = "rod"
 [[field]]
@@ -20,7 +26,7 @@ medium = "vacuum"
 [[field.electrodes]]
 name = "rod"
 voltage = "-%[4]g kV"
-profile = [{ from = ["0 mm", "%[2]g mm"] }, { to = ["%[1]g mm", "%[5]g mm"], centre = ["0 mm", "%[5]g mm"], turn = "left" }, { to = ["%[1]g mm", "170 mm"] }]
+profile = [%[2]s, { to = ["%[1]g mm", "170 mm"] }]
 [[field.electrodes]]
 name = "can"
 voltage = "0 V"
@@ -28,7 +34,7 @@ profile = [{ from = ["0 mm", "0 mm"] }, { to = ["%[3]g mm", "0 mm"] }, { to = ["
 [[field.boundary]]
 kind = "natural"
 profile = [{ from = ["%[1]g mm", "170 mm"] }, { to = ["%[3]g mm", "170 mm"] }]
-`, radius, gap, can, volts, gap+radius)
+`, radius, end, can, volts)
 }
 
 // Answers for a described field: the powers of the distance, the rod's radius and the

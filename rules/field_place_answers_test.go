@@ -13,27 +13,11 @@ import (
 // sharpRod is a rod with a flat end at a distance from the floor of a can, its edge rounded
 // by a radius where there is one.
 func sharpRod(radius, gap, edge, volts float64) []byte {
-	end := fmt.Sprintf(`{ to = ["%[1]g mm", "%[2]g mm"] }`, radius, gap)
+	end := fmt.Sprintf(`{ from = ["0 mm", "%[2]g mm"] }, { to = ["%[1]g mm", "%[2]g mm"] }`, radius, gap)
 	if edge > 0 {
-		end = fmt.Sprintf(`{ to = ["%[1]g mm", "%[2]g mm"] }, { to = ["%[3]g mm", "%[4]g mm"], centre = ["%[1]g mm", "%[4]g mm"], turn = "left" }`, radius-edge, gap, radius, gap+edge)
+		end = fmt.Sprintf(`{ from = ["0 mm", "%[2]g mm"] }, { to = ["%[3]g mm", "%[2]g mm"] }, { to = ["%[1]g mm", "%[4]g mm"], centre = ["%[3]g mm", "%[4]g mm"], turn = "left" }`, radius, gap, radius-edge, gap+edge)
 	}
-	return fmt.Appendf(nil, `format = 1
-title = "rod"
-[[field]]
-name = "gap"
-medium = "vacuum"
-[[field.electrodes]]
-name = "rod"
-voltage = "-%[4]g kV"
-profile = [{ from = ["0 mm", "%[2]g mm"] }, %[3]s, { to = ["%[1]g mm", "170 mm"] }]
-[[field.electrodes]]
-name = "can"
-voltage = "0 V"
-profile = [{ from = ["0 mm", "0 mm"] }, { to = ["80 mm", "0 mm"] }, { to = ["80 mm", "170 mm"] }]
-[[field.boundary]]
-kind = "natural"
-profile = [{ from = ["%[1]g mm", "170 mm"] }, { to = ["80 mm", "170 mm"] }]
-`, radius, gap, end, volts)
+	return rodEnding(end, radius, 80, volts)
 }
 
 func named(t *testing.T, remedy, dimension string) float64 {

@@ -32,9 +32,9 @@ type Arrangement struct {
 // Dimension is one length of an arrangement and the arrangement with another in its
 // place.
 type Dimension struct {
-	Name  string // "edge radius of the hole"
-	Key   string // "feedthrough.hole.edge_radius"
-	Value quantity.Length
+	Name  string          // "edge radius of the hole"
+	Key   string          // "feedthrough.hole.edge_radius"
+	Value quantity.Length // 0 for the radius of an edge that is sharp
 	// Near is where it is, r + iz in metres; nil where it is everywhere.
 	Near *complex128
 	With func(quantity.Length) *Arrangement

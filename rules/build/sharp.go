@@ -11,11 +11,8 @@ import (
 	"kilovet/hv/quantity"
 )
 
-// Radius 0 is that of an edge drawn sharp: a dimension of no length, which another radius
-// rounds off between the straight pieces that meet there.
-
 // sharpEdges are the radii of the edges of described electrodes where two straight pieces
-// meet.
+// meet: 0 as they are drawn, where another radius rounds them off between the pieces.
 func sharpEdges(f *chain.Field) (all []Dimension) {
 	for i := range f.Electrodes {
 		strokes := f.Electrodes[i].Profile

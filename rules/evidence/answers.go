@@ -16,7 +16,7 @@ import (
 // Answer is what a dimension of an arrangement does to a greatest field.
 type Answer struct {
 	build.Dimension
-	Power  float64         // the field goes with the dimension to this power, about
+	Power  float64         // the field goes with the dimension to this power, about; 0 for a sharp edge
 	Needed quantity.Length // the dimension at which the rule is just met
 	Err    error           // why there is none; also where the rule is met already
 }

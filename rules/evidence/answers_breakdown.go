@@ -28,14 +28,10 @@ func (e *Evidence) BreakdownAnswers(f *build.Arrangement, w Where, share quantit
 // demandedBreakdown is the voltage along the critical line over a share of the breakdown
 // there.
 func (e *Evidence) demandedBreakdown(f *build.Arrangement, p Stress, w Where, share quantity.Fraction) (float64, error) {
-	traced, err := p.Field.Within(p.Peak)
-	if err != nil {
-		return 0, err
-	}
+	traced, l, reversed, err := lineFrom(p)
 	if traced.Closed {
 		return 0, lack.Failed("an insulator stands in the way of the line")
 	}
-	l, reversed, err := lineOf(traced)
 	if err != nil {
 		return 0, err
 	}

@@ -39,7 +39,7 @@ func (e *Evidence) atEdge(i, of int, edge field.Edge, body string) measure {
 		all := c.Field.Edges()
 		switch {
 		case len(all) == of-1 && len(edge.Electrodes) > 0:
-			return atPlace(clear(c, Where{Electrode: edge.Electrodes[0], Body: body}), e.demanded)(f, c)
+			return atPlace(clearIn(c, Where{Electrode: edge.Electrodes[0], Body: body}), e.demanded)(f, c)
 		case len(all) != of || !slices.Equal(all[i].Bodies, edge.Bodies) || !slices.Equal(all[i].Electrodes, edge.Electrodes):
 			return tried{}, lack.Failed("the outline then has other edges")
 		}
@@ -56,8 +56,8 @@ func (e *Evidence) atEdge(i, of int, edge field.Edge, body string) measure {
 	}
 }
 
-// clear looks clear of the edges that are left where there is no peak for them.
-func clear(c fieldCase, w Where) Where {
+// clearIn looks clear of the edges that are left in a field where there is no peak for them.
+func clearIn(c fieldCase, w Where) Where {
 	if _, err := w.find(c.Field); err != nil {
 		w.Distance = EdgeDistance
 	}

@@ -80,6 +80,15 @@ func sharpEnd(start gap.Polarity, reversed bool) gap.Polarity {
 	return gap.Positive
 }
 
+// lineFrom is the line from a greatest field, as it was traced and as a critical one.
+func lineFrom(p Stress) (traced field.Line, line shape.Line, reversed bool, err error) {
+	if traced, err = p.Field.Within(p.Peak); err != nil {
+		return traced, line, false, err
+	}
+	line, reversed, err = lineOf(traced)
+	return traced, line, reversed, err
+}
+
 // lineOf is a traced line as a critical one, from its more highly stressed end on; it
 // reports whether that is the far one.
 func lineOf(l field.Line) (line shape.Line, reversed bool, err error) {

@@ -24,11 +24,7 @@ func (e *Evidence) demanded(f *build.Arrangement, p Stress, w Where) (float64, e
 	if err != nil || p.Strength <= limit {
 		return float64(p.Strength / limit), err
 	}
-	traced, err := p.Field.Within(p.Peak)
-	if err != nil {
-		return 0, err
-	}
-	l, reversed, err := lineOf(traced)
+	traced, l, reversed, err := lineFrom(p)
 	if err != nil {
 		return 0, err
 	}
@@ -37,12 +33,9 @@ func (e *Evidence) demanded(f *build.Arrangement, p Stress, w Where) (float64, e
 	return float64(volts / onset), err
 }
 
+// demandedOil is the same against the working stress of oil.
 func demandedOil(g gap.Gap, p Stress) (float64, error) {
-	traced, err := p.Field.Within(p.Peak)
-	if err != nil {
-		return 0, err
-	}
-	l, _, err := lineOf(traced)
+	_, l, _, err := lineFrom(p)
 	if err != nil {
 		return 0, err
 	}

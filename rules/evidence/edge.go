@@ -64,11 +64,11 @@ func (e *Evidence) AtEdge(f *build.Arrangement, edge field.Edge, distance quanti
 			if !there {
 				continue
 			}
-			r, any, err := strongest(f, c, same, distance)
+			r, reads, err := strongest(f, c, same, distance)
 			if err != nil {
 				return EdgeStress{}, err
 			}
-			if any && (!found || r.Strength() > most.Strength) {
+			if reads && (!found || r.Strength() > most.Strength) {
 				most = EdgeStress{r, r.Strength(), same.Exponent, polarityAt(c, same), c.Under, c.Settled, c}
 				found = true
 			}

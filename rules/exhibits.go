@@ -18,6 +18,7 @@ func curves(e *evidence.Evidence) []exhibit.Curve {
 		cathodeSpectrum,
 		spotCurves,
 		paschen,
+		decayCurve,
 	)
 }
 

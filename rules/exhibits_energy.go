@@ -12,15 +12,9 @@ import (
 // energyTables show what stays charged, what it could do to a person, and what a rod
 // goes through, with regulation lost where that is known, else in the working state.
 func energyTables(e *evidence.Evidence) []exhibit.Table {
-	if !e.HasSupply() {
+	at := holding(e)
+	if at == nil {
 		return nil
-	}
-	at := e.Under(evidence.Condition{State: evidence.Lost})
-	if _, err := at.Potential("output"); err != nil {
-		at = e.Under(evidence.Condition{State: evidence.Working})
-		if _, err := at.Potential("output"); err != nil {
-			return nil
-		}
 	}
 	return gather(at, nodeEnergy, openedAtNodes, openedTable, comebackAtNodes, comebackTable, limitTable, rodTable, bodyTable, openedEach)
 }

@@ -31,7 +31,7 @@ var rests = map[string][]string{
 	"feed.test_voltage":       {"figure potential cathode"},
 	"gap.strikes":             {"figure bias.voltage", "figure divider.reading"},
 	"touch.voltage":           {"table energy.limits", "table energy.nodes"},
-	"discharge.waiting_time":  {"table energy.nodes", "figure stored.discharge_time"},
+	"discharge.waiting_time":  {"curve energy.decay", "table energy.nodes", "figure stored.discharge_time"},
 	"discharge.one_open":      {"table energy.one_open"},
 	"discharge.residue":       {"figure stored.residue"},
 	"discharge.recharge":      {"table energy.recharge"},

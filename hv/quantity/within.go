@@ -2,6 +2,7 @@ package quantity
 
 import (
 	"regexp"
+	"slices"
 	"strings"
 )
 
@@ -27,13 +28,18 @@ func Mentions(sentence string) (all []Mention) {
 			all = append(all, Mention{m[1] + " " + m[2], d, symbol})
 			continue
 		}
-		for _, u := range shown {
-			if u == symbol {
-				all = append(all, Mention{m[1] + " " + m[2], nil, symbol})
-			}
+		if slices.Contains(shown, symbol) {
+			all = append(all, Mention{m[1] + " " + m[2], nil, symbol})
 		}
 	}
 	return all
+}
+
+// IsUnit reports whether a word is a unit that a description is written in or an
+// instrument shows.
+func IsUnit(word string) bool {
+	symbol := plainSigns(word)
+	return knows(symbol) != nil || slices.Contains(shown, symbol)
 }
 
 // knows is the first dimension that knows a unit.

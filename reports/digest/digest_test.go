@@ -159,7 +159,7 @@ func TestMargins(t *testing.T) {
 		margin float64
 		want   string
 	}{
-		{-0.12, "-12.0 %"}, {0.153, "+15.3 %"}, {0, "0.0 %"}, {-1e-6, "-0.0001 %"}, {1e-6, "+0.0001 %"}, {math.Inf(1), "tenfold or more"}, {9, "tenfold or more"}, {8.9, "+890.0 %"}, {math.NaN(), ""},
+		{-0.12, "-12.0 %"}, {0.153, "+15.3 %"}, {0, "0.0 %"}, {-6e-16, "0.0 %"}, {6e-10, "0.0 %"}, {-1e-6, "-0.0001 %"}, {1e-6, "+0.0001 %"}, {math.Inf(1), "tenfold or more"}, {9, "tenfold or more"}, {8.9, "+890.0 %"}, {math.NaN(), ""},
 	} {
 		if got := digest.Margin(rule.Finding{Margin: &c.margin}); got != c.want {
 			t.Errorf("margin %g reads %q, want %q", c.margin, got, c.want)

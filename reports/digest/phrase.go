@@ -69,15 +69,18 @@ func Margin(f rule.Finding) string {
 		return ""
 	case *f.Margin >= 9:
 		return "tenfold or more"
-	case *f.Margin > 0:
+	case *f.Margin > 0 && !quantity.Equal(1+*f.Margin, 1):
 		return "+" + percent(*f.Margin)
 	}
 	return percent(*f.Margin)
 }
 
 // percent keeps the sign of a deficit too small to show, so that a failure never
-// reads as nought.
+// reads as nought; what a verdict does not see is none.
 func percent(v float64) string {
+	if quantity.Equal(1+v, 1) {
+		v = 0
+	}
 	if v != 0 && math.Abs(v) < 0.0005 {
 		return fmt.Sprintf("%.1g %%", v*100)
 	}

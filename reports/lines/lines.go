@@ -5,7 +5,6 @@ package lines
 import (
 	"bytes"
 	"strings"
-	"unicode/utf8"
 
 	"kilovet/reports/digest"
 )
@@ -41,32 +40,15 @@ func (w *Writer) Section(title string, entries int) {
 
 // Hang writes a paragraph with a label before its first line, every line indented.
 func (w *Writer) Hang(label string, indent int, s string) {
-	line := label + strings.Repeat(" ", indent-utf8.RuneCountInString(label))
-	empty := true
-	for _, word := range w.words(s, indent) {
-		if !empty && utf8.RuneCountInString(line)+1+utf8.RuneCountInString(word) > w.width {
-			w.Line(line)
-			line, empty = strings.Repeat(" ", indent), true
-		}
-		if !empty {
-			line += " "
-		}
-		line, empty = line+word, false
+	begin := label + strings.Repeat(" ", indent-runes(label))
+	all := Broken(digest.Clean(s), w.width-indent)
+	if len(all) == 0 {
+		w.Line(begin)
 	}
-	w.Line(line)
-}
-
-// words takes a text apart; a word wider than a line is cut.
-func (w *Writer) words(s string, indent int) []string {
-	var all []string
-	for _, word := range strings.Fields(digest.Clean(s)) {
-		runes := []rune(word)
-		for most := w.width - indent; len(runes) > most; runes = runes[most:] {
-			all = append(all, string(runes[:most]))
-		}
-		all = append(all, string(runes))
+	for _, line := range all {
+		w.Line(begin + line)
+		begin = strings.Repeat(" ", indent)
 	}
-	return all
 }
 
 // Bytes is what was written.

@@ -2,7 +2,6 @@ package page
 
 import (
 	"slices"
-	"strings"
 	"unicode/utf8"
 
 	"kilovet/reports/digest"
@@ -88,10 +87,10 @@ func wanted(t exhibit.Table, i int) want {
 	return w
 }
 
-// longest is the length of the longest word, as far as it is kept whole.
+// longest is the length of the longest word, or number with its unit, as far as it is kept whole.
 func longest(text string) int {
 	n := 0
-	for _, word := range strings.Fields(text) {
+	for _, word := range digest.Held(text) {
 		n = max(n, min(utf8.RuneCountInString(word), longestWord))
 	}
 	return n

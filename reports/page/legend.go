@@ -53,14 +53,22 @@ func again(rows [][]string, column int) bool {
 func long(text string) bool { return utf8.RuneCountInString(text) > longAgain }
 
 func (l *legend) take(text string) {
-	if !long(text) || l.letters[text] != "" || len(l.lines) == len(alphabet) {
+	if !long(text) || l.letters[text] != "" {
 		return
 	}
-	l.letters[text] = "note " + string(alphabet[len(l.lines)])
+	l.letters[text] = "note " + lettered(len(l.lines))
 	l.lines = append(l.lines, small(l.letters[text]+": "+text))
 }
 
 const alphabet = "abcdefghijklmnopqrstuvwxyz"
+
+// lettered counts in letters: a to z, aa, ab and so on.
+func lettered(n int) string {
+	if n < len(alphabet) {
+		return alphabet[n : n+1]
+	}
+	return lettered(n/len(alphabet)-1) + lettered(n%len(alphabet))
+}
 
 // short is the letter of a text, or the text.
 func (l *legend) short(text string) string {

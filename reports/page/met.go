@@ -3,6 +3,7 @@ package page
 import (
 	"slices"
 	"strings"
+	"unicode/utf8"
 
 	"kilovet/reports/digest"
 	"kilovet/rules/rule"
@@ -13,7 +14,8 @@ func (n *writer) met(c digest.Chapter, findings []rule.Finding) []Block {
 	if len(findings) == 0 {
 		return nil
 	}
-	t := Table{Title: "Findings that meet", Columns: []Column{{Title: "Rule and subject", Share: 0.2}, {Title: "Limit", Share: 0.105, Right: true}, {Title: "Found", Share: 0.085, Right: true}, {Title: "Margin", Share: 0.085, Right: true}, {Title: "Reason", Share: 0.525}}}
+	asked, found := amountShare(0.105, findings, limit), amountShare(0.085, findings, digest.Provided)
+	t := Table{Title: "Findings that meet", Columns: []Column{{Title: "Rule and subject", Share: 0.2}, {Title: "Limit", Share: asked, Right: true}, {Title: "Found", Share: found, Right: true}, {Title: "Margin", Share: 0.085, Right: true}, {Title: "Reason", Share: 0.715 - asked - found}}}
 	var unders [][]string
 	for _, f := range findings {
 		unders = append(unders, []string{f.Under})
@@ -31,6 +33,16 @@ func (n *writer) met(c digest.Chapter, findings []rule.Finding) []Block {
 	}
 	t.Legend = l.lines
 	return []Block{t}
+}
+
+// amountShare is what a column of amounts takes of the width: usually so much, more where
+// one needs it to stay on its line.
+func amountShare(usual float64, findings []rule.Finding, amount func(rule.Finding) string) float64 {
+	longest := 0
+	for _, f := range findings {
+		longest = max(longest, utf8.RuneCountInString(amount(f)))
+	}
+	return max(usual, min(0.15, float64(longest+2)/lineRunes))
 }
 
 // metRule is the rows of the findings of a rule; what they share stands above them.

@@ -6,7 +6,6 @@ import (
 
 	"kilovet/reports/digest"
 	"kilovet/rules"
-	"kilovet/rules/rule"
 )
 
 // How much of each list the first sheet shows; the rest stands on those after it.
@@ -75,53 +74,6 @@ func summary(lines []rules.Line) Facts {
 		facts = append(facts, Fact{l.Label, shortened(l.Text)})
 	}
 	return Facts{facts}
-}
-
-// against is what stands against switching on and, after it, what is met with little
-// in hand: as many rows as the sheet holds.
-func (n *writer) against() []Block {
-	r := n.review
-	if len(r.Findings) == 0 {
-		return nil
-	}
-	const little = "Met with little in hand or on an assumption"
-	standing, narrow := n.entryRows(digest.Against(r)), n.entryRows(digest.Narrow(r))
-	title := "Stands against switching on"
-	var blocks []Block
-	if len(standing) == 0 {
-		blocks, title = append(blocks, Paragraph{"No finding stands against switching on."}), little
-	} else if len(narrow) > 0 {
-		standing = append(standing, Row{Group: true, Cells: []Cell{lines(strong(little))}})
-	}
-	if rows := append(standing, narrow...); len(rows) > 0 {
-		blocks = append(blocks, Table{Columns: []Column{{Title: "", Share: 0.15}, {Title: title, Share: 0.32}, {Title: "Why", Share: 0.44}, {Title: "Sheet", Share: 0.09, Right: true}}, Rows: rows, Fill: true})
-	}
-	return blocks
-}
-
-func (n *writer) entryRows(findings []rule.Finding) []Row {
-	var rows []Row
-	for _, e := range digest.Entries(findings) {
-		to := n.anchorOf(e.First)
-		rows = append(rows, Row{Cells: []Cell{
-			{Verdict: e.First.Verdict},
-			lines(linked(strong(e.First.Rule), to), small(shortened(strings.TrimSuffix("concerns "+string(e.First.Concern)+": "+e.Names(mostSubjects), ": ")))),
-			lines(plain(shortened(e.First.Because))),
-			{Lines: []Line{{Sheet: to, Links: []Link{{To: to}}}}},
-		}})
-	}
-	return rows
-}
-
-// Rest is the row that stands for those of a table from the given one on.
-func (t Table) Rest(from int) Row {
-	n := 0
-	for _, r := range t.Rows[from:] {
-		if !r.Group {
-			n++
-		}
-	}
-	return Row{Group: true, Cells: []Cell{lines(strong("And " + count(n, "rule") + " more, on the sheets that follow."))}}
 }
 
 func missing(r *rules.Review) []Block {

@@ -103,6 +103,8 @@ type Row struct {
 	Under bool // belongs to the group row before it
 	Cells []Cell
 
+	Stands int // how many entries it stands for where a table is cut and the rest counted
+
 	Anchor string // what links lead to
 }
 

@@ -3,6 +3,7 @@ package page
 import (
 	"cmp"
 	"slices"
+	"unicode/utf8"
 
 	"kilovet/reports/digest"
 	"kilovet/rules"
@@ -57,7 +58,7 @@ func figureTable(title string, groups []digest.Group, states []string) Table {
 			used = append(used, i)
 		}
 	}
-	share := min(0.095, 0.5/float64(len(used)))
+	share := min(valueShare(groups), 0.5/float64(len(used)))
 	t := Table{Title: title, Columns: []Column{{Title: "Figure", Share: 0.235}, {Title: "What it is; what computed it", Share: 0.765 - share*float64(len(used))}}}
 	for _, s := range used {
 		t.Columns = append(t.Columns, Column{Title: cmp.Or(states[s], "value"), Share: share, Right: true})
@@ -72,6 +73,20 @@ func figureTable(title string, groups []digest.Group, states []string) Table {
 		}
 	}
 	return t
+}
+
+// valueShare is what a column of values takes of the width.
+func valueShare(groups []digest.Group) float64 {
+	const usual = 0.095
+	longest := 0
+	for _, g := range groups {
+		for _, row := range g.Rows {
+			for _, v := range row.Values {
+				longest = max(longest, utf8.RuneCountInString(v))
+			}
+		}
+	}
+	return max(usual, float64(min(longest, longestText/2)+2)/lineRunes)
 }
 
 // toldTable names the figures that tables show, and those tables.

@@ -34,7 +34,7 @@ func (w *flow) table(t page.Table) {
 		w.begin(r, min(together(rows, i), w.bottom-w.top-keep))
 		w.row(r)
 	}
-	w.legend(t.Legend)
+	w.legend(t.Title, t.Legend)
 	w.y += 1
 }
 
@@ -52,10 +52,16 @@ func total(rows []row) float64 {
 	return sum
 }
 
-// legend is what stands under a table.
-func (w *flow) legend(lines []page.Line) {
+// legend is what stands under a table; on another sheet than its last row it says whose it
+// is.
+func (w *flow) legend(of string, lines []page.Line) {
+	again := func() {
+		if of != "" {
+			w.place(row{pad: 0.3, cells: []rowCell{{width: w.across, lines: w.fit(column, of+", notes", w.across, 1)}}})
+		}
+	}
 	for _, l := range lines {
-		w.row(row{pad: 0.3, cells: []rowCell{{width: w.across, lines: w.cell([]page.Line{l}, w.across)}}})
+		w.row(row{pad: 0.3, again: again, cells: []rowCell{{width: w.across, lines: w.cell([]page.Line{l}, w.across)}}})
 	}
 }
 

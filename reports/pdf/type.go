@@ -5,6 +5,7 @@ import (
 	"strings"
 	"unicode/utf8"
 
+	"kilovet/reports/digest"
 	"kilovet/reports/page"
 )
 
@@ -58,7 +59,8 @@ type wanted struct {
 	width float64
 }
 
-// wrap breaks a text into lines of a width: at spaces, in a word too long for a
+// wrap breaks a text into lines of a width: at spaces, but not between a number and its
+// unit, in a word too long for a
 // line after one of its joints, and failing that anywhere. What is asked for again is
 // remembered; the lines belong to all who asked.
 func (f *fonts) wrap(t style, s string, width float64) []set {
@@ -94,10 +96,7 @@ func (f *fonts) broken(t style, s string, width float64) []set {
 			reach += f.em(t.face, ' ')
 			next++
 		}
-		word := len(s)
-		if i := strings.IndexByte(s[next:], ' '); i >= 0 {
-			word = next + i
-		}
+		word := held(s, next)
 		for _, r := range s[next:word] {
 			reach += f.em(t.face, r)
 		}
@@ -121,10 +120,26 @@ func (f *fonts) broken(t style, s string, width float64) []set {
 	return append(lines, set{style: t, text: s})
 }
 
-// joint is where to break a word that is longer than the width: after the last
-// joint of the part that fits, at least after its first rune.
+// held is where the piece that begins here ends: no line parts a number and its unit.
+func held(s string, from int) int {
+	for at := from; ; at++ {
+		i := strings.IndexByte(s[at:], ' ')
+		if i < 0 {
+			return len(s)
+		}
+		if at += i; digest.Parts(s, at) {
+			return at
+		}
+	}
+}
+
+// joint is where to break a piece that is longer than the width: at the last space of the
+// part that fits, or after its last joint, at least after its first rune.
 func (f *fonts) joint(t style, s string, width float64) int {
 	fits, best, sum := 0, 0, 0.0
+	if i := strings.IndexByte(s, ' '); i > 0 && f.width(t, s[:i]) <= width {
+		return i
+	}
 	for i, r := range s {
 		sum += f.em(t.face, r) * t.size * points
 		if sum > width && i > 0 {

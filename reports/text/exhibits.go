@@ -5,6 +5,7 @@ import (
 	"strings"
 
 	"kilovet/reports/digest"
+	"kilovet/reports/lines"
 	"kilovet/rules"
 	"kilovet/rules/exhibit"
 )
@@ -139,7 +140,7 @@ const (
 func (g *grid) thin(widths []int) bool {
 	for _, row := range g.cells {
 		for i, c := range row {
-			if widths[i] < thinColumn && len(broken(c, widths[i])) > thinLines {
+			if widths[i] < thinColumn && len(lines.Broken(c, widths[i])) > thinLines {
 				return true
 			}
 		}
@@ -171,17 +172,17 @@ func (g *grid) write() {
 
 // row writes cells beside each other, each on as many lines as it takes.
 func (g *grid) row(cells []string) {
-	lines := make([][]string, len(cells))
+	set := make([][]string, len(cells))
 	most := 0
 	for i, c := range cells {
-		lines[i] = broken(c, g.widths[i])
-		most = max(most, len(lines[i]))
+		set[i] = lines.Broken(c, g.widths[i])
+		most = max(most, len(set[i]))
 	}
 	for n := range most {
 		var b strings.Builder
 		b.WriteString("  ")
 		for i := range cells {
-			b.WriteString(g.padded(i, at(lines[i], n)) + pad("", between))
+			b.WriteString(g.padded(i, at(set[i], n)) + pad("", between))
 		}
 		g.line(b.String())
 	}

@@ -1,5 +1,7 @@
 package text
 
+import "kilovet/reports/lines"
+
 // mostShort is how long a text may be to stand beside others in a list.
 const mostShort = 30
 
@@ -33,5 +35,5 @@ func (g *grid) beside(texts []string) {
 	for i := range texts[:max(0, len(texts)-1)] {
 		texts[i] += ";"
 	}
-	g.lines("", 6, filled(texts, g.width-6))
+	g.lines("", 6, lines.Filled(texts, g.width-6))
 }

@@ -7,6 +7,7 @@ import (
 	"unicode/utf8"
 
 	"kilovet/reports/digest"
+	"kilovet/reports/lines"
 	"kilovet/rules/rule"
 )
 
@@ -62,7 +63,7 @@ func (w *writer) short(label string, indent int, s string, most int) {
 }
 
 func (w *writer) broken(s string, indent int) []string {
-	return broken(digest.Clean(s), w.width-indent)
+	return lines.Broken(digest.Clean(s), w.width-indent)
 }
 
 func (w *writer) lines(label string, indent int, lines []string) {

@@ -337,3 +337,13 @@ func TestNoDiagramWithoutASupply(t *testing.T) {
 		t.Errorf("%+v", d)
 	}
 }
+
+// A capacitance that is not given is not drawn as none.
+func TestWhatIsNotGivenIsNotNought(t *testing.T) {
+	d, _ := draw(t, small+"\n[cable]\nlength = \"2 m\"\n")
+	for _, p := range d.Parts() {
+		if p.Name == "cable" && p.Value != "2 m" {
+			t.Errorf("the cable is drawn as %q", p.Value)
+		}
+	}
+}

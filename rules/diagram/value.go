@@ -75,7 +75,7 @@ func (b *builder) limiter(el *circuit.Element) Kind {
 func (b *builder) value(el *circuit.Element) string {
 	switch {
 	case el.Name == "cable":
-		return fmt.Sprintf("%s, %s", quantity.Text(b.chain.Cable.Length.V), quantity.Text(el.Capacitance))
+		return strings.Join(given(shown(b.chain.Cable.Length), capacitance(el)), ", ")
 	case strings.HasPrefix(el.Name, "drive.source"):
 		return fmt.Sprintf("%s peak, %s", quantity.Text(b.chain.Drive.Peak.V), quantity.Text(b.chain.Drive.Frequency.V))
 	case el.Name == "heater.supply":
@@ -97,7 +97,7 @@ func plain(el *circuit.Element) string {
 	case circuit.Resistor:
 		return quantity.Text(el.Resistance)
 	case circuit.Capacitor:
-		return quantity.Text(el.Capacitance)
+		return capacitance(el)
 	case circuit.Inductor:
 		return quantity.Text(el.Inductance)
 	case circuit.Sink:
@@ -108,6 +108,14 @@ func plain(el *circuit.Element) string {
 		return quantity.Text(el.Strikes)
 	}
 	return ""
+}
+
+// capacitance is that of an element; empty where it is not known.
+func capacitance(el *circuit.Element) string {
+	if el.Doubt != nil && el.Capacitance == 0 {
+		return ""
+	}
+	return quantity.Text(el.Capacitance)
 }
 
 // elements says how a resistor is made up: "4 × 500 MΩ, 2 strings".

@@ -157,8 +157,12 @@ func (p *Periodic) current(list []branch, step int) samples {
 }
 
 func (p *Periodic) branchCurrent(b *branch, step int) samples {
-	t := p.track
-	v := t.stages(step, &b.span)
+	v := p.track.stages(step, &b.span)
+	return p.track.currentAt(b, step, &v)
+}
+
+// currentAt is the current of a branch in a step, given the voltage across it.
+func (t *track) currentAt(b *branch, step int, v *samples) samples {
 	var y samples
 	switch e := b.element; e.Kind {
 	case circuit.Resistor:
@@ -174,10 +178,10 @@ func (p *Periodic) branchCurrent(b *branch, step int) samples {
 			y[j] = t.currents(step, j)[b.coil]
 		}
 	case circuit.Capacitor:
-		y = t.charging(step, &v, float64(e.Capacitance))
+		y = t.charging(step, v, float64(e.Capacitance))
 	case circuit.Diode:
 		if !b.bare {
-			y = t.charging(step, &v, float64(e.Rectifier.Junction))
+			y = t.charging(step, v, float64(e.Rectifier.Junction))
 		}
 		d := &t.diodes[b.diode]
 		for j := range y {

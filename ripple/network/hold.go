@@ -19,7 +19,7 @@ type HoldOptions struct {
 }
 
 // Hold finds the peak of the drive at which the mean of a node is a set voltage, within a
-// part in 1e8, and the state there. Both are sought together, drive and state made larger
+// part in 1e8, a swift search in 1e6, and the state there. Both are sought together, drive and state made larger
 // or smaller at once; where that does not get there, trial by trial. It is a lack where
 // the load pulls the node to nothing, where there is no such node, and where no peak is
 // found in a dozen trials.
@@ -82,9 +82,10 @@ func (o *HoldOptions) signed(c *circuit.Circuit) float64 {
 	return float64(o.Set)
 }
 
-// byTrials seeks the drive by the secant method.
+// byTrials seeks the drive by the secant method, which asks for exact states.
 func (o *HoldOptions) byTrials() (quantity.Voltage, *Periodic, error) {
 	const tries = 12
+	o.Swift = false
 	a := o.First
 	va, near, err := o.try(a)
 	if err != nil {

@@ -95,7 +95,8 @@ func (l *ledger) add(i, k int) {
 	if l.plain[i].element == nil { // a tie that nothing hangs on
 		return
 	}
-	v, y := l.view.track.stages(k, &l.spans[i]), l.view.branchCurrent(&l.plain[i], k)
+	v := l.view.track.stages(k, &l.spans[i])
+	y := l.view.track.currentAt(&l.plain[i], k, &v)
 	l.whole[i] = y
 	if e := l.plain[i].element; e.Kind == circuit.Diode && e.Rectifier.Junction > 0 {
 		j := l.view.track.charging(k, &v, float64(e.Rectifier.Junction))

@@ -19,8 +19,11 @@ type level struct {
 	trust  float64 // what it changed by over what it was to
 }
 
-// held is the part of the voltage to be held by which the mean may be off.
-const held = 1e-8
+// The part of the voltage to be held by which the mean may be off, and in a swift search.
+const (
+	held       = 1e-8
+	heldNearly = 1e-6
+)
 
 // strange is the part of the drive by which a lift makes the changes over a period before
 // and after it unlike: drops and loads do not grow with the drive.
@@ -55,15 +58,18 @@ func (s *search) driveTo(drive float64) {
 }
 
 // tolerated is the part by which the mean may be off in a grade.
-func (g grade) tolerated() float64 {
-	if g == rough {
+func (s *search) tolerated(g grade) float64 {
+	switch {
+	case g == rough:
 		return 1e-3
+	case s.swift:
+		return heldNearly
 	}
 	return held
 }
 
 // lacking is the factor by which the mean over the period walked last, and what the
-// correction in hand does to it, falls short of the voltage to be held.
+// correction in hand does to it all along the period, falls short of the voltage to be held.
 func (s *search) lacking() (float64, error) {
 	l := s.level
 	if l == nil {
@@ -71,26 +77,13 @@ func (s *search) lacking() (float64, error) {
 	}
 	p := Periodic{track: s.linear}
 	mean := float64(p.swing(&l.span).Mean)
-	s.shifted(s.du, 1)
-	after := l.span.difference(s.du)
-	s.shifted(s.du, 0)
-	mean += after - l.span.difference(s.du)
+	s.unpack(s.step, s.root, s.dq, s.di)
+	s.work.Products++
+	mean += s.linear.carryWatching(s.dq, s.di, s.lanes, s.du, &l.span)
 	if mean/l.set <= 0 {
 		return 0, lack.Failed("the load pulls the voltage to nothing")
 	}
 	return l.set / mean, nil
-}
-
-// shifted are the potentials at the start of the period, with a part of the correction in
-// hand.
-func (s *search) shifted(u []float64, part float64) {
-	x := s.k2
-	copy(x, s.x)
-	axpy(part, s.step, x)
-	s.unpack(x, s.root, s.q, s.amps)
-	s.pace.place(s.q, s.amps, s.on)
-	s.pace.try(s.grain)
-	copy(u, s.pace.stage[2])
 }
 
 // lift changes the drive so that the mean comes nearer by a factor, and the state with

@@ -134,7 +134,7 @@ func (s *search) improve(g grade, size float64, done func() bool) (finished bool
 	if err != nil {
 		return false, err
 	}
-	if math.Abs(f-1) <= g.tolerated() && done() {
+	if math.Abs(f-1) <= s.tolerated(g) && done() {
 		if g == rough {
 			s.follows(f)
 		}
@@ -221,11 +221,11 @@ func (s *search) answer(x []float64) {
 }
 
 // balanced reports whether the charges come back to 1e-8 of what the diodes pass,
-// or, where rounding keeps them from coming any closer, to 3e-7; in a swift search to 1e-4.
+// or, where rounding keeps them from coming any closer, to 3e-7; in a swift search to 1e-5.
 func (s *shooter) balanced(stalled bool) bool {
 	worst, most := s.largestCharge(s.r), s.largestCharge(s.x)
 	if s.swift {
-		return worst <= math.Max(1e-4*s.pace.passed, 1e-11*most)
+		return worst <= math.Max(1e-5*s.pace.passed, 1e-11*most)
 	}
 	if stalled {
 		return worst <= math.Max(3e-7*s.pace.passed, 1e-11*most)

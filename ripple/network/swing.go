@@ -69,10 +69,15 @@ type samples [4]float64
 
 // stages are the voltages across a span in one step.
 func (t *track) stages(step int, s *span) samples {
-	var y samples
-	st := &t.steps[step]
-	for j := range y {
-		y[j] = s.volts(t.potentials(step, j), st.sign, st.sine[j])
+	st, n := &t.steps[step], t.n
+	u := t.u[4*step*n : 4*(step+1)*n]
+	fixed, swing := s.offset.direct+s.offset.square*st.sign, s.offset.sine
+	y := samples{fixed + swing*st.sine[0], fixed + swing*st.sine[1], fixed + swing*st.sine[2], fixed + swing*st.sine[3]}
+	if k := s.a; k >= 0 {
+		y[0], y[1], y[2], y[3] = y[0]+u[k], y[1]+u[n+k], y[2]+u[2*n+k], y[3]+u[3*n+k]
+	}
+	if k := s.b; k >= 0 {
+		y[0], y[1], y[2], y[3] = y[0]-u[k], y[1]-u[n+k], y[2]-u[2*n+k], y[3]-u[3*n+k]
 	}
 	return y
 }

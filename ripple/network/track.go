@@ -78,11 +78,24 @@ func (t *track) conducting(step int) []bool {
 // track to its end. The diode law is continuous, so the instants of switching do
 // not enter.
 func (t *track) carry(dq, di []float64, lanes []trio, du []float64) {
+	t.carryWatching(dq, di, lanes, du, nil)
+}
+
+// throughout makes the mean over a step from the solutions at the poles.
+var throughout = trio{
+	share1*residue[0].r + share2*residue[1].r + share3*residue[2].r,
+	share1*residue[0].a + share2*residue[1].a + share3*residue[2].a,
+	share1*residue[0].b + share2*residue[1].b + share3*residue[2].b,
+}
+
+// carryWatching is carry with the change of the mean over the track that a voltage
+// undergoes; of none it is zero.
+func (t *track) carryWatching(dq, di []float64, lanes []trio, du []float64, watched *span) (mean float64) {
 	for k := range t.steps {
 		h := t.steps[k].length
-		pole, part := poleR, &residue[2]
+		pole, part, all := poleR, &residue[2], &throughout
 		if t.steps[k].euler {
-			pole, part = 1, &trio{r: 1}
+			pole, part, all = 1, &trio{r: 1}, &trio{r: 1}
 		}
 		for i, q := range dq {
 			lanes[i] = trio{r: q, a: q}
@@ -96,11 +109,16 @@ func (t *track) carry(dq, di []float64, lanes []trio, du []float64) {
 			x := t.changeOfCoil(i, h, pole, di[i], t.inductors[i].differenceTrio(lanes))
 			di[i] = part.of(&x)
 		}
+		if watched != nil {
+			v := watched.differenceTrio(lanes)
+			mean += h / t.period * all.of(&v)
+		}
 		for i := range lanes {
 			du[i] = part.of(&lanes[i])
 		}
 		t.charge(du, dq)
 	}
+	return mean
 }
 
 // changeOfCoil is a change of an inductor's current at the poles: (δi₀ + h δv/L)/p.

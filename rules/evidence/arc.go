@@ -67,7 +67,7 @@ func (e *Evidence) Standing(node string) (*network.Periodic, error) {
 		if err != nil {
 			return nil, err
 		}
-		p, err := e.solve(c.Bridge(ArcName, node, "ground", arcResistance), nil)
+		p, err := e.solve(c.Bridge(ArcName, node, "ground", arcResistance), nil, true)
 		return p.Periodic, err
 	})
 }

@@ -54,7 +54,7 @@ func (e *Evidence) atDriveOf(drive, state State) (periodic, error) {
 		if err != nil {
 			return periodic{}, err
 		}
-		return e.solve(c, near.Periodic)
+		return e.solve(c, near.Periodic, true)
 	})
 }
 

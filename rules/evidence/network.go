@@ -10,9 +10,11 @@ import (
 // periodic is the steady state of a circuit in time, by the names of its nodes.
 type periodic struct{ *network.Periodic }
 
-// solve finds the steady state of a circuit, from that of a similar one where given.
-func (e *Evidence) solve(c *circuit.Circuit, from *network.Periodic) (periodic, error) {
-	p, err := network.Steady(trusted(c), network.Options{Frequency: e.chain.Drive.Frequency.V, From: from})
+// solve finds the steady state of a circuit, from that of a similar one where given. Only
+// the states of the nominal chain at its full drive are solved as exactly as it goes; those
+// beside them swiftly, to a part in a million.
+func (e *Evidence) solve(c *circuit.Circuit, from *network.Periodic, swift bool) (periodic, error) {
+	p, err := network.Steady(trusted(c), network.Options{Frequency: e.chain.Drive.Frequency.V, From: from, Swift: swift})
 	e.tellSolved()
 	return periodic{p}, err
 }

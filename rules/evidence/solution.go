@@ -29,7 +29,11 @@ func (e *Evidence) solution() (periodic, error) {
 				return periodic{t.state}, nil
 			}
 		}
-		return e.solve(c, e.alike())
+		if same, ok := e.unchanged(); ok {
+			return same, nil
+		}
+		from := e.alike()
+		return e.solve(c, from, from != nil)
 	})
 }
 
@@ -39,19 +43,49 @@ func (e *Evidence) holds() bool {
 	return e.condition.Peak == 0 && e.chain.Regulation != nil && e.condition.State != Lost && (share == 0 || share == 1)
 }
 
-// alike is the state of the nominal chain, whole and at full drive, to start from; nil
-// where this is the one, or where it has none.
+// unchanged is the state of the whole chain by itself, where the drive is set by hand to
+// what it is anyway.
+func (e *Evidence) unchanged() (periodic, bool) {
+	c := e.condition
+	if c.Peak == 0 || c.Corner != Nominal || c.Fault.Name != "" || c.Drive != 0 && c.Drive != 1 {
+		return periodic{}, false
+	}
+	own := e.Under(Condition{State: c.State})
+	peak, err := own.Peak()
+	if err != nil || !quantity.Equal(peak, c.Peak) {
+		return periodic{}, false
+	}
+	s, err := own.solution()
+	return s, err == nil
+}
+
+// alike is a state to start from: that of the chain before it was changed, of the nominal
+// chain at the same drive, or of the whole and nominal one at its full drive; nil where
+// this is the one, or where it has none.
 func (e *Evidence) alike() *network.Periodic {
-	if e.before != nil {
-		if s, err := e.before.Under(e.condition).solution(); err == nil {
-			return s.Periodic
-		}
+	near, c := e, e.condition
+	full := Condition{State: c.State}
+	switch {
+	case e.before != nil:
+		near = e.before.Under(c)
+	case c.Corner != Nominal && c.Fault.Name == "":
+		c.Corner = Nominal
+		near = e.Under(c)
+	case c.key() != full.key():
+		near = e.Under(full)
+	default:
 		return nil
 	}
-	if e.condition.Corner == Nominal && e.condition.Fault.Name == "" {
+	s, err := near.solution()
+	if err != nil {
 		return nil
 	}
-	s, err := e.Under(Condition{State: e.condition.State}).solution()
+	return s.Periodic
+}
+
+// working is the state of the chain at work, to start from; nil where it has none.
+func (e *Evidence) working() *network.Periodic {
+	s, err := e.Under(Condition{State: Working}).solution()
 	if err != nil {
 		return nil
 	}

@@ -66,7 +66,7 @@ func (e *Evidence) fullDrive() (periodic, error) {
 		if err != nil {
 			return periodic{}, err
 		}
-		return e.solve(c, nil)
+		return e.solve(c, e.working(), true)
 	})
 }
 

@@ -91,7 +91,7 @@ func (p *Periodic) branch(i int, sign float64, bare bool) branch {
 }
 
 // flow adds up branches over the period and reports whether the sum is an impulse
-// at a jump.
+// at the jumps of a square wave, of which that in the middle of the period tells for both.
 func (p *Periodic) flow(list []branch) (f Flow, impulse bool) {
 	var mean, square, peak, end float64
 	for k := range p.track.steps {
@@ -112,7 +112,9 @@ func (p *Periodic) flow(list []branch) (f Flow, impulse bool) {
 		if p.track.steps[k].jump {
 			q := p.jump(list, k)
 			mean += q
-			moved += math.Abs(q)
+			if k > 0 { // at the start of the period stands what its end leaves open
+				moved += 2 * math.Abs(q)
+			}
 		}
 	}
 	impulse = moved > 1e-6*(math.Sqrt(square*p.track.period)+1e-9*p.track.typical*p.track.scale)

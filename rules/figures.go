@@ -26,7 +26,9 @@ func figures(e *evidence.Evidence) []figure.Figure {
 		for _, state := range evidence.States {
 			in(state, potentials, bearing, multiplier, output, divider, stored, elements)
 		}
-		in(evidence.Lost, arcs)
+		if !e.Leaves("faults") {
+			in(evidence.Lost, arcs)
+		}
 		in(evidence.Working, beam, gunFigures, paths)
 		in("", once)
 	}

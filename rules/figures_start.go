@@ -60,5 +60,5 @@ func startTable(e *evidence.Evidence) []exhibit.Table {
 
 // events shows what happens once: arcs, starts and load steps.
 func events(e *evidence.Evidence) []exhibit.Table {
-	return gather(e, arcTables, startTable, stepTable)
+	return gather(e, unless("faults", arcTables), startTable, stepTable)
 }

@@ -87,9 +87,9 @@ func (r *Review) judge(e *evidence.Evidence) []said {
 	return all
 }
 
-// judged is what a rule says, or that its family is left out.
+// judged is what a rule says, or that it is left out.
 func judged(e *evidence.Evidence, f family, r rule.Rule) rule.Judgement {
-	if e.Leaves(f.name) {
+	if e.Leaves(f.name) || r.Fault && e.Leaves("faults") {
 		return rule.Over(omitted)
 	}
 	j := r.Judge(e)

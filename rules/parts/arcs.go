@@ -16,6 +16,7 @@ var arcVoltage = rule.Rule{
 	Applies: "Filter, gun-end and bias resistors and loose ones in the lead, regulation lost; the arc is followed in time. A clamp across the bias resistor limits it.",
 	Margin:  limits.SinglePulse.Comfort("the single-pulse rating"),
 	Concern: rule.Equipment,
+	Fault:   true,
 	Sources: []rule.Source{limits.ArcSource, limits.SinglePulse.Source},
 	Example: rule.Example{
 		Swaps:   []rule.Swap{{Was: `rated_pulse_voltage = "25 kV"`, Becomes: `rated_pulse_voltage = "10 kV"`}},
@@ -58,6 +59,7 @@ var arcEnergy = rule.Rule{
 	Applies: "Filter and gun-end resistors, loose ones in the lead, and a bias resistor without a clamp, regulation lost: the larger of what the stored charge alone leaves in it and what an arc does with the drive on, over 20 periods. What the drive goes on feeding in while an arc stands is shown apart, as a power.",
 	Margin:  limits.SinglePulse.Comfort("the single-pulse rating"),
 	Concern: rule.Equipment,
+	Fault:   true,
 	Sources: []rule.Source{limits.ArcSource, limits.SinglePulse.Source},
 	Example: rule.Example{
 		Swaps:   []rule.Swap{{Was: `rated_energy = "2.5 J"`, Becomes: `rated_energy = "0.05 J"`}},

@@ -60,6 +60,7 @@ var diodeSurge = rule.Rule{
 	Applies: "Every diode of the multiplier, regulation lost.",
 	Margin:  limits.DiodeSurge.Comfort("the rating"),
 	Concern: rule.Equipment,
+	Fault:   true,
 	Sources: []rule.Source{limits.DiodeSurge.Source},
 	Example: rule.Example{
 		Swaps: []rule.Swap{{Was: `surge_current = "3 A"`, Becomes: `surge_current = "50 mA"`}},

@@ -81,6 +81,7 @@ var redundancy = rule.Rule{
 	Demands: "At least two permanent strings to ground each discharge the chain alone within the waiting time, with every part at the high end of its tolerance.",
 	Applies: "Where a node holds more charge or energy than may be touched.",
 	Concern: rule.Life,
+	Fault:   true,
 	Sources: []rule.Source{limits.RedundancySource},
 	Example: rule.Example{
 		Swaps: []rule.Swap{

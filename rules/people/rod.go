@@ -82,6 +82,7 @@ var oneOpen = rule.Rule{
 	Applies: "Where a node holds more charge or energy than may be touched.",
 	Margin:  "marginal where something stays and a rod is described",
 	Concern: rule.Life,
+	Fault:   true,
 	Sources: []rule.Source{limits.RodSource},
 	Example: rule.Example{
 		Swaps: []rule.Swap{{Was: `earthing_rod    = { resistance = "100 kohm", rated_voltage = "50 kV", rated_energy = "20 J" }`, Becomes: ""}},

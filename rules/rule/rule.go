@@ -13,6 +13,9 @@ type Rule struct {
 	Concern Concern
 	Sources []Source
 	Example Example
+	// Fault says that the rule judges what a single fault or a flashover does: it is left
+	// out with the family of faults, whatever family it stands in.
+	Fault bool
 	// Judge gives the findings, one a subject; or, where the rule does not apply,
 	// none and the reason.
 	Judge func(*evidence.Evidence) Judgement

@@ -18,6 +18,7 @@ var dividerClamp = rule.Rule{
 	Demands: "A clamp holds the tap of the divider at 120 V or less should the lower arm open.",
 	Applies: "Where an open lower arm would lift the tap above 60 V.",
 	Concern: rule.Life,
+	Fault:   true,
 	Sources: []rule.Source{clampSource},
 	Example: rule.Example{
 		Swaps: []rule.Swap{{Was: `clamp  = { voltage = "90 V", kind = "gas tube", leakage = "1 nA" }`, Becomes: ""}},
@@ -60,6 +61,7 @@ var meterRating = rule.Rule{
 	Applies: "Where a meter is described at the divider.",
 	Margin:  limits.InsulationVoltage.Comfort("the rating"),
 	Concern: rule.Equipment,
+	Fault:   true,
 	Sources: []rule.Source{clampSource, limits.InsulationVoltage.Source},
 	Example: rule.Example{
 		Swaps:   []rule.Swap{{Was: `rated_voltage = "300 V"`, Becomes: `rated_voltage = "80 V"`}},

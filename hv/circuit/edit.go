@@ -72,14 +72,15 @@ func (c *Circuit) With(name string, edit func(*Element)) *Circuit {
 // Each is the circuit with every element changed by an edit; an element for which
 // the edit reports false is left out.
 func (c *Circuit) Each(edit func(*Element) bool) *Circuit {
-	b := c.rebuild()
-	b.elements = nil
+	with := *c // names and links stay, whatever hangs on them
+	with.Elements = make([]Element, 0, len(c.Elements))
 	for _, e := range c.Elements {
 		if edit(&e) {
-			b.elements = append(b.elements, e)
+			e.From, e.To = c.nodes[e.from], c.nodes[e.to]
+			with.Elements = append(with.Elements, e)
 		}
 	}
-	return b.circuit()
+	return &with
 }
 
 // Reverse swaps the ends of an element: a diode put in the wrong way round.

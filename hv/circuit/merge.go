@@ -51,6 +51,7 @@ func (b *builder) circuit() *Circuit {
 		c.nodes[name] = n
 		c.labels[n] = append(c.labels[n], name)
 	}
+	c.Elements = make([]Element, 0, len(b.elements))
 	for _, e := range b.elements {
 		e.From, e.To = c.nodes[e.from], c.nodes[e.to]
 		c.Elements = append(c.Elements, e)

@@ -57,7 +57,6 @@ type valued struct {
 type rectifier struct {
 	span
 	drop, on, leak float64
-	assumed        bool // the leakage is the assumed one
 	replaced       bool // the on-resistance is the assumed one
 }
 

@@ -42,7 +42,7 @@ func (s *system) rectify(leak float64) {
 			d.on, d.replaced, replaced = most, true, true
 		}
 		if d.leak == 0 {
-			d.leak, d.assumed = math.Max(leak*c, bareLeak), true
+			d.leak = math.Max(leak*c, bareLeak)
 		}
 	}
 	if replaced {

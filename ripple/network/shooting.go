@@ -31,7 +31,7 @@ type shooter struct {
 func newShooter(s *system) *shooter {
 	m := s.states()
 	h := &shooter{system: s, root: s.roots(), solver: newKrylov(m), peaks: newPeaks(s)}
-	h.pace = &pace{walker: newWalker(s), track: &track{system: s}, energy: s.measureOfEnergy()}
+	h.pace = &pace{walker: newWalker(s), track: (&track{system: s}).reserve(), energy: s.measureOfEnergy()}
 	h.x, h.r, h.step, h.old = make([]float64, m), make([]float64, m), make([]float64, m), make([]float64, m)
 	h.q, h.dq, h.du = make([]float64, s.n), make([]float64, s.n), make([]float64, s.n)
 	h.amps, h.di = make([]float64, len(s.inductors)), make([]float64, len(s.inductors))

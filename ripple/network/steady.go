@@ -254,16 +254,17 @@ func (s *shooter) widest(x, y []float64) (name string, worst float64) {
 	return name, worst
 }
 
-// plausible refuses a state that only the assumed leakage of the diodes keeps
-// finite: a load that draws current nothing feeds.
+// plausible refuses a state that only the leakage of the diodes keeps finite, beyond all
+// that a ladder can put across one: a load that draws current nothing feeds.
 func (p *Periodic) plausible() error {
 	drawn := 0.0
 	for i := range p.track.sinks {
 		drawn = max(drawn, abs(p.track.sinks[i].value))
 	}
+	beyond := math.Max(100, 2*float64(len(p.track.diodes))) * p.track.scale
 	for i := range p.track.diodes {
 		d := &p.track.diodes[i]
-		if v := float64(p.swing(&d.span).Peak()); d.assumed && v > 100*p.track.scale && v*d.leak > 1e-3*drawn && drawn > 0 {
+		if v := float64(p.swing(&d.span).Peak()); v > beyond && v*d.leak > 1e-3*drawn && drawn > 0 {
 			return lack.Failed("a load draws current that only the leakage of %s could feed", p.Circuit.Elements[d.element].Name)
 		}
 	}

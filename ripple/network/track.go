@@ -28,6 +28,14 @@ func (t *track) clear() {
 	t.steps, t.u, t.amps, t.on = t.steps[:0], t.u[:0], t.amps[:0], t.on[:0]
 }
 
+// reserve makes room for the steps of a period in which every diode switches twice.
+func (t *track) reserve() *track {
+	n := 16 + 8*len(t.diodes)
+	t.steps, t.on = make([]step, 0, n), make([]bool, 0, n*len(t.diodes))
+	t.u, t.amps = make([]float64, 0, 4*n*t.n), make([]float64, 0, 4*n*len(t.inductors))
+	return t
+}
+
 // block is the number of steps whose factors lie together: memory that grows by blocks is
 // never copied.
 const block = 64

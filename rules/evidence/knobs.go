@@ -15,7 +15,10 @@ type knob struct {
 	unit string // SI
 	now  float64
 	more bool // more of it means less ripple
-	set  func(c *chain.Chain, factor float64)
+	// steep is set where ripple may go with more than the first power of the value, or rest
+	// on others until it comes near.
+	steep bool
+	set   func(c *chain.Chain, factor float64)
 }
 
 // knobs lists what could be changed against ripple: filter resistors and capacitors, drive
@@ -30,18 +33,18 @@ func (e *Evidence) knobs() []knob {
 		}
 	}
 	all = append(all,
-		knob{"drive.frequency", "Hz", float64(c.Drive.Frequency.V), true, func(c *chain.Chain, f float64) {
+		knob{"drive.frequency", "Hz", float64(c.Drive.Frequency.V), true, true, func(c *chain.Chain, f float64) {
 			drive := *c.Drive
 			drive.Frequency.V *= quantity.Frequency(f)
 			c.Drive = &drive
 		}},
-		knob{"multiplier capacitors", "F", float64(c.Multiplier.SmoothingCapacitor.Value.V[0]), true, func(c *chain.Chain, f float64) {
+		knob{"multiplier capacitors", "F", float64(c.Multiplier.SmoothingCapacitor.Value.V[0]), true, false, func(c *chain.Chain, f float64) {
 			m := *c.Multiplier
 			m.CouplingCapacitor, m.SmoothingCapacitor = scaled(m.CouplingCapacitor, f), scaled(m.SmoothingCapacitor, f)
 			c.Multiplier = &m
 		}})
 	if p := c.Multiplier.PickupToOutput; p.V > 0 {
-		all = append(all, knob{"multiplier.pickup_to_output", "F", float64(p.V), false, func(c *chain.Chain, f float64) {
+		all = append(all, knob{"multiplier.pickup_to_output", "F", float64(p.V), false, true, func(c *chain.Chain, f float64) {
 			m := *c.Multiplier
 			m.PickupToOutput.V *= quantity.Capacitance(f)
 			c.Multiplier = &m
@@ -51,7 +54,7 @@ func (e *Evidence) knobs() []knob {
 }
 
 func filterResistor(c *chain.Chain, i int) knob {
-	return knob{fmt.Sprintf("filter.%d.resistor", i+1), "ohm", float64(c.Filters[i].Resistor.Total()), true, func(c *chain.Chain, f float64) {
+	return knob{fmt.Sprintf("filter.%d.resistor", i+1), "ohm", float64(c.Filters[i].Resistor.Total()), true, false, func(c *chain.Chain, f float64) {
 		c.Filters = slices.Clone(c.Filters)
 		r := *c.Filters[i].Resistor
 		r.Value.V *= quantity.Resistance(f)
@@ -60,7 +63,7 @@ func filterResistor(c *chain.Chain, i int) knob {
 }
 
 func filterCapacitor(c *chain.Chain, i int) knob {
-	return knob{fmt.Sprintf("filter.%d.capacitor", i+1), "F", float64(c.Filters[i].Capacitor.Value.V[0]), true, func(c *chain.Chain, f float64) {
+	return knob{fmt.Sprintf("filter.%d.capacitor", i+1), "F", float64(c.Filters[i].Capacitor.Value.V[0]), true, false, func(c *chain.Chain, f float64) {
 		c.Filters = slices.Clone(c.Filters)
 		c.Filters[i].Capacitor = scaled(c.Filters[i].Capacitor, f)
 	}}

@@ -37,6 +37,7 @@ const (
 	nearness  = 0.01
 	solutions = 5
 	firstStep = 4.0
+	leastTurn = 1.5
 	feeble    = 0.02 // a change of the disturbance's logarithm that counts as none
 )
 
@@ -78,12 +79,12 @@ func (e *Evidence) use() (float64, error) {
 // since ripple goes with powers of most values.
 func (e *Evidence) turn(k knob, start float64) Remedy {
 	r := Remedy{Part: k.name, Unit: k.unit, Now: k.now, Relaxed: start <= 1}
-	b := math.Log(firstStep)
+	a, ua := 0.0, math.Log(start)
+	b := k.firstTurn(ua)
 	if k.more == r.Relaxed {
 		b = -b
 	}
 	bound := math.Copysign(math.Log(turnedBy), b)
-	a, ua := 0.0, math.Log(start)
 	for range solutions {
 		x := e.Changed(k.change(math.Exp(b)))
 		used, err := x.use()
@@ -112,6 +113,19 @@ func (e *Evidence) turn(k knob, start float64) Remedy {
 		a, ua, b = b, ub, next
 	}
 	return r
+}
+
+// firstTurn is the logarithm of the first factor to try, for that of the use at the start.
+// A part with whose first power ripple goes at most may be relaxed as far as it is tried;
+// else it takes about its first power.
+func (k knob) firstTurn(use float64) float64 {
+	switch {
+	case k.steep:
+		return math.Log(firstStep)
+	case use <= 0:
+		return math.Log(turnedBy)
+	}
+	return math.Min(math.Max(use, math.Log(leastTurn)), math.Log(turnedBy))
 }
 
 // change turns the knob by a factor.

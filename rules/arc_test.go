@@ -26,7 +26,7 @@ bypass_capacitance = "0 F"
 // coupling capacitor at the peak, 1 nF (5 kV)²/2 + 1 nF (2.5 kV)²/2 = 15.6 mJ; the
 // resistor sees the full 5 kV and passes 5 mA.
 func TestArcOfOneStage(t *testing.T) {
-	r := reviewed(t, filtered(t))
+	r := reviewedWhole(t, filtered(t))
 	for id, want := range map[string]float64{"arc.part_voltage": 5000, "arc.part_current": 5e-3, "arc.part_energy": 15.625e-3} {
 		got := 0.0
 		for _, f := range r.Figures {
@@ -78,7 +78,7 @@ func TestArcsStayWithinTheirBounds(t *testing.T) {
 // TestArcAtALooseResistor: a resistor in the lead beyond the output takes the full voltage
 // of an arc at its far end, which one at the output would spare it.
 func TestArcAtALooseResistor(t *testing.T) {
-	r := reviewed(t, append(filtered(t), []byte(`
+	r := reviewedWhole(t, append(filtered(t), []byte(`
 [[part]]
 name = "arc limiter"
 kind = "resistor"

@@ -66,7 +66,7 @@ func TestAnUnsaidSupplyIsAnAssumption(t *testing.T) {
 	} {
 		text := regexp.MustCompile(line).ReplaceAllString(string(described(t, "column")), "")
 		rests := 0
-		for _, f := range reviewed(t, []byte(text)).Findings {
+		for _, f := range reviewedWhole(t, []byte(text)).Findings {
 			told := slices.ContainsFunc(f.Assumptions, func(a string) bool { return strings.HasSuffix(a, key+" is not given") })
 			if f.Under == "" {
 				continue

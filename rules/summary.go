@@ -2,6 +2,7 @@ package rules
 
 import (
 	"fmt"
+	"slices"
 
 	"kilovet/hv/chain"
 	"kilovet/hv/quantity"
@@ -13,10 +14,14 @@ import (
 func summary(e *evidence.Evidence) []Line {
 	c := e.Chain()
 	if !e.HasSupply() {
-		text := rule.Number(len(c.Spacings), "spacing", "spacings") + " at stated voltages, no supply"
+		text := rule.Number(len(c.Spacings), "spacing", "spacings")
 		if n := len(c.Feedthroughs); n > 0 {
-			text = rule.Number(len(c.Spacings), "spacing", "spacings") + " and " + rule.Number(n, "feedthrough", "feedthroughs") + " at stated voltages, no supply"
+			text += " and " + rule.Number(n, "feedthrough", "feedthroughs")
 		}
+		if slices.ContainsFunc(c.Spacings, func(s chain.Spacing) bool { return s.From.Set() }) {
+			text += ", on the mains or"
+		}
+		text += " at stated voltages, no supply"
 		return []Line{{"Chain", text}}
 	}
 	lines := []Line{

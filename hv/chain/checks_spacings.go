@@ -37,11 +37,17 @@ func (s *survey) spacingEnds(sp *Spacing) {
 		s.fault(sp.To.Place, "to without from", either)
 	case s.lacks(sp.From.Place) && s.lacks(sp.To.Place) && s.lacks(sp.Voltage.Place):
 		s.fault(sp.Here(), "neither nodes nor a voltage", either)
-	case from && s.without(s.Multiplier != nil):
-		s.fault(sp.From.Place, "without a multiplier nothing tells the voltage between two nodes", `give voltage in place of from and to, as in voltage = "20 kV"`)
+	case from && s.without(s.Multiplier != nil) && !sp.ofMains():
+		s.fault(sp.From.Place, "without a multiplier nothing tells the voltage between two nodes other than mains and ground", `give voltage in place of from and to, as in voltage = "20 kV"`)
 	case from && sp.From.V == sp.To.V && s.sound(sp.To.Place):
 		s.fault(sp.To.Place, "both sides on the same node", "name the node of the other side")
 	}
+}
+
+// ofMains reports whether a spacing is between the mains and ground alone, whose voltage
+// [site] tells.
+func (sp *Spacing) ofMains() bool {
+	return !slices.ContainsFunc(append([]string{sp.From.V, sp.To.V}, sp.Also.V...), func(node string) bool { return node != "mains" && node != "ground" })
 }
 
 // spacingMedium reports keys that another medium has.

@@ -101,7 +101,7 @@ current = "1 uA"
 [gun]           # FAULT 1 multiplier: gun: this hangs on a multiplier
 [[spacing]]
 name = "gap"
-from = "output" # FAULT 8 spacing: spacing.from: without a multiplier nothing tells the voltage between two nodes; give voltage
+from = "output" # FAULT 8 spacing: spacing.from: without a multiplier nothing tells the voltage between two nodes other than mains and ground; give voltage
 to = "ground"
 medium = "air"
 [[field]]

@@ -87,10 +87,15 @@ func (e *Evidence) extremes(f *build.Arrangement) ([]map[string]quantity.Voltage
 // mostCases bounds the combinations of extremes.
 const mostCases = 16
 
-// span is between what potentials a node swings to ground.
+// span is between what potentials a node swings to ground: the mains between both peaks of
+// its live conductor.
 func (e *Evidence) span(node string) (least, greatest quantity.Voltage, err error) {
 	if node == "ground" {
 		return 0, 0, nil
+	}
+	if e.OnMains(node) {
+		peak, err := e.Touched(node)
+		return -peak, peak, err
 	}
 	w, err := e.swing(node, "ground")
 	return w.Least, w.Greatest, err

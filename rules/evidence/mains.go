@@ -50,6 +50,22 @@ func (e *Evidence) lastingOver(a, b string) (quantity.Voltage, error) {
 	return quantity.Voltage(math.Hypot(float64(rms), float64(max(line, stated/math.Sqrt2)))), err
 }
 
+// acrossMains is the voltage over a spacing between the mains and ground where no supply is
+// described, whatever its state would be.
+func (e *Evidence) acrossMains(s *chain.Spacing) (gap.Voltages, error) {
+	line, err := e.lineVoltage()
+	if err != nil {
+		return gap.Voltages{}, err
+	}
+	stated, err := e.mainsPeak()
+	if err != nil {
+		return gap.Voltages{}, err
+	}
+	sharp, err := e.sharp(s)
+	peak := max(line*math.Sqrt2, stated)
+	return gap.Voltages{Peak: peak, LongTerm: peak / math.Sqrt2, Sharp: sharp}, err
+}
+
 // lineVoltage is the r.m.s. voltage of the live conductor of the mains to ground.
 func (e *Evidence) lineVoltage() (quantity.Voltage, error) {
 	if e.chain.Site == nil || !e.chain.Site.Mains.Set() {

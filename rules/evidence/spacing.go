@@ -107,6 +107,10 @@ func (e *Evidence) across(s *chain.Spacing) (v gap.Voltages, under, long Conditi
 	if s.Voltage.Set() {
 		return gap.Voltages{Peak: s.Voltage.V, LongTerm: s.Voltage.V, Sharp: gap.Polarity(s.SharperElectrode.V)}, under, long, nil
 	}
+	if !e.HasSupply() {
+		v, err = e.acrossMains(s)
+		return v, under, long, err
+	}
 	live := nodesOf(s)
 	peak, err := Worst(e, live, func(e *Evidence, n string) (quantity.Voltage, error) { return e.peakOver(n, s.To.V) })
 	if err != nil {

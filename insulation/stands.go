@@ -91,18 +91,22 @@ func onset(g gap.Gap, s gas.State, l shape.Line) (gap.Answer[quantity.Voltage], 
 	if peek, err := gas.PeekOnset(s, g.Shape.Kind, l); err == nil {
 		a.Shown = append(a.Shown, peek...)
 	}
-	if r, err := measuringGap(g, s); err == nil {
-		a.Shown = append(a.Shown, gap.Beside[quantity.Voltage]{Value: r.Value, Source: r.Source})
-	}
+	a.Shown = append(a.Shown, measuringGap(g, s)...)
 	return a, nil
 }
 
-// measuringGap is what IEC 60052 says of a sphere gap of its sizes, one sphere earthed.
-func measuringGap(g gap.Gap, s gas.State) (table.Reading[quantity.Voltage], error) {
+// measuringGap is what the tables of sphere gaps say of one of their sizes, one sphere
+// earthed.
+func measuringGap(g gap.Gap, s gas.State) (all []gap.Beside[quantity.Voltage]) {
 	if g.Shape.Kind != gap.SphereSphere || g.Shape.Symmetric || s.Gas != gap.AirGas {
-		return table.Reading[quantity.Voltage]{}, lack.Range("no measuring gap")
+		return nil
 	}
-	return gas.SphereGap(s, 2*g.Shape.Radius, g.Clearance)
+	for _, look := range []func(gas.State, quantity.Length, quantity.Length) (table.Reading[quantity.Voltage], error){gas.SparkGap, gas.SphereGap} {
+		if r, err := look(s, 2*g.Shape.Radius, g.Clearance); err == nil {
+			all = append(all, gap.Beside[quantity.Voltage]{Value: r.Value, Source: r.Source})
+		}
+	}
+	return all
 }
 
 // Breakdown is the peak or DC voltage that a gap in a gas breaks down at. Between

@@ -166,5 +166,11 @@ func crossingOf(lo, hi, want float64, f func(float64) (float64, error)) (quantit
 		}
 	}
 	x, err := solve.Level(lo, hi, want, f, end(lo, "more"), end(hi, "less"))
-	return quantity.Length(x), err
+	if err != nil {
+		return 0, err
+	}
+	if y, err := f(x); err != nil || math.Abs(y/want-1) > 1e-6 {
+		return 0, lack.Range("laws change at %s: between what one gives there and the other does lies what is asked for", quantity.Text(quantity.Length(x)))
+	}
+	return quantity.Length(x), nil
 }

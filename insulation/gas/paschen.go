@@ -72,30 +72,6 @@ func perTorr(a, b, gamma, least, most float64, text string, mark gap.Mark) Towns
 // of uniform fields.
 var AirConstants = perTorr(15, 365, 0.01, 100, 800, "Townsend constants of air, Bazelyan and Raizer", gap.Read)
 
-// constants are those of the other gases; A and B were read where so marked. The ranges
-// of E/p they are used in are von Engel's (memory); γ is the
-// largest of the metals read (Beroual and Fofana 2016), which gives the lowest voltage.
-var constants = map[gap.Gas][]Townsend{
-	gap.AirGas: {AirConstants},
-	gap.Nitrogen: {
-		perTorr(11.8, 325, 0.1, 100, 600, "Townsend constants of nitrogen, Lieberman and Lichtenberg, Table 14.1", gap.Read),
-		perTorr(12, 342, 0.1, 100, 600, "Townsend constants of nitrogen, Nasser 1971", gap.Read),
-	},
-	gap.Hydrogen: {
-		perTorr(4.8, 136, 0.095, 150, 600, "Townsend constants of hydrogen, Lieberman and Lichtenberg, Table 14.1", gap.Read),
-		perTorr(5.07, 138.7, 0.095, 150, 600, "Townsend constants of hydrogen, Nasser 1971", gap.Read),
-	},
-	gap.Helium: {
-		perTorr(2.8, 77, 0.021, 20, 150, "Townsend constants of helium, Lieberman and Lichtenberg, Table 14.1", gap.Read),
-		perTorr(3.07, 34.7, 0.021, 20, 150, "Townsend constants of helium, Nasser 1971", gap.Read),
-	},
-	gap.Argon: {
-		perTorr(11.5, 176, 0.12, 100, 600, "Townsend constants of argon, Lieberman and Lichtenberg, Table 14.1", gap.Read),
-		perTorr(14.67, 180, 0.12, 100, 600, "Townsend constants of argon, Nasser 1971", gap.Read),
-	},
-	gap.CarbonDioxide: {perTorr(20, 466, 0.01, 500, 1000, "Townsend constants of carbon dioxide, von Engel", gap.Memory)},
-}
-
 // Minimum is the lowest breakdown voltage of a gas and the product of pressure and
 // gap at which it was measured.
 type Minimum struct {
@@ -145,29 +121,20 @@ func paschenAnswer(g gap.Gas, pd quantity.PressureLength) (gap.Answer[quantity.V
 		return gap.Answer[quantity.Voltage]{}, err
 	}
 	if best <= m.Voltage {
-		return floor, nil
+		return remembered(g, source, floor), nil
 	}
-	return gap.Answer[quantity.Voltage]{
+	return remembered(g, source, gap.Answer[quantity.Voltage]{
 		Value: best, Because: "Paschen's law of " + string(g),
 		Sources: []gap.Source{source.Governing(), m.Source},
-	}, nil
+	}), nil
 }
 
-// lowestLaw is the lowest voltage among the constants that hold; left of its own
-// minimum a law says no more than that minimum.
-func lowestLaw(g gap.Gas, pd quantity.PressureLength) (best quantity.Voltage, source gap.Source, err error) {
-	err = lack.Range("no Townsend constants are known here for %q", string(g))
-	for _, c := range constants[g] {
-		_, bottom := c.Minimum()
-		v, outside := c.Voltage(max(pd, bottom))
-		switch {
-		case outside == nil && (err != nil || v < best):
-			best, source, err = v, c.Source, nil
-		case outside != nil && err != nil:
-			err = outside
-		}
+// remembered says of an answer that it rests on constants from memory.
+func remembered(g gap.Gas, source gap.Source, a gap.Answer[quantity.Voltage]) gap.Answer[quantity.Voltage] {
+	if source.Mark == gap.Memory {
+		a.Assumptions = append(a.Assumptions, "the figures of "+string(g)+" are from memory, and hold for the pure gas: "+source.Text)
 	}
-	return best, source, err
+	return a
 }
 
 // AtProduct is the breakdown voltage between plates at a product of pressure, at 20 °C,

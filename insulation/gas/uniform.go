@@ -40,10 +40,11 @@ func uniformLaw(x quantity.Length) quantity.Voltage {
 // apart, right of the Paschen minimum.
 //
 // Air: the law of uniform fields; under δ d = 0.1 mm Paschen's law, not below the
-// measured minimum. Nitrogen: Paschen's law under some Torr cm; from 1 mm to 5 cm at
-// normal density the law of air, which it meets within 1 % at 1 cm. Sulphur
-// hexafluoride: the streamer criterion. The other gases: Paschen's law where its
-// constants hold. Left of the minimum the longest path breaks down first: the answer
+// measured minimum. Nitrogen: Paschen's law; from 1 mm to 5 cm at normal density the law
+// of air, which it meets within 1 % at 1 cm. Sulphur hexafluoride: the streamer criterion,
+// under 0.1 mm at normal density a lower bound. The other gases: Paschen's law where its
+// constants hold: hydrogen to some 4400, argon to 340, helium to 36 Torr cm, carbon
+// dioxide nowhere past its minimum. Left of the minimum the longest path breaks down first: the answer
 // is the minimum itself. Gaps under 10 µm and pressures above 1 MPa are a lack.
 func UniformBreakdown(s State, d quantity.Length) (gap.Answer[quantity.Voltage], error) {
 	switch {
@@ -90,8 +91,11 @@ func uniformAir(s State, d quantity.Length) (gap.Answer[quantity.Voltage], error
 // (G. G. Raju, Dielectrics in Electric Fields, ch. 8; read).
 func uniformNitrogen(s State, d quantity.Length) (gap.Answer[quantity.Voltage], error) {
 	x := quantity.Length(s.Density()) * d
-	if !quantity.AtLeast(x, quantity.Length(1e-3)) || !quantity.AtMost(x, quantity.Length(50e-3)) {
+	switch {
+	case !quantity.AtLeast(x, quantity.Length(1e-3)):
 		return paschenAnswer(gap.Nitrogen, s.reduced(d))
+	case !quantity.AtMost(x, quantity.Length(50e-3)):
+		return gap.Answer[quantity.Voltage]{}, beyond(gap.Nitrogen, s.reduced(d))
 	}
 	source := gap.Source{Text: "nitrogen as air within 1 % at 1 cm, G. G. Raju, Dielectrics in Electric Fields, ch. 8", Mark: gap.Derived}
 	return gap.Answer[quantity.Voltage]{

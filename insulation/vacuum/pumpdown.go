@@ -159,6 +159,9 @@ func (s Vessel) Band(v quantity.Voltage) (Band, error) {
 	}
 	top, known := s.top(v, m)
 	b.To = s.reading(top)
+	if a, err := s.uniform(top); err == nil {
+		b.Assumptions = append(b.Assumptions, a.Assumptions...)
+	}
 	if !known {
 		b.Assumptions = append(b.Assumptions, "no law of the gas shows where between "+quantity.Text(s.at(m.At))+" and "+quantity.Text(b.To)+" the band ends: taken at its highest")
 	}

@@ -113,6 +113,7 @@ func paschenAnswer(g gap.Gas, pd quantity.PressureLength) (gap.Answer[quantity.V
 		Value: m.Voltage, Because: "lowest breakdown voltage of " + string(g) + " at any pressure and gap",
 		Sources: []gap.Source{m.Governing()},
 	}
+	floor = remembered(g, m.Source, floor)
 	if pd <= m.At {
 		return floor, nil
 	}
@@ -121,7 +122,7 @@ func paschenAnswer(g gap.Gas, pd quantity.PressureLength) (gap.Answer[quantity.V
 		return gap.Answer[quantity.Voltage]{}, err
 	}
 	if best <= m.Voltage {
-		return remembered(g, source, floor), nil
+		return floor, nil
 	}
 	return remembered(g, source, gap.Answer[quantity.Voltage]{
 		Value: best, Because: "Paschen's law of " + string(g),

@@ -43,7 +43,7 @@ var clearance = rule.Rule{
 var creepage = rule.Rule{
 	ID: "spacing.creepage", Title: "Creepage distance",
 	Demands: "The distance along the surface is at least what the tables ask for at the highest lasting voltage, and never less than the clearance needed.",
-	Applies: "Every spacing in air or on a printed board, and surfaces in other media where a creepage distance is given: in vacuum from a tested surface or the practice of alumina, in nitrogen and sulphur hexafluoride at 80 kPa or more as in air, elsewhere from a tested surface; without one too short where the medium alone would need more, in oil and along joints of solids enough where pollution degree 1 in air would be, and unassessed between.",
+	Applies: "Every spacing in air or on a printed board, and surfaces in other media where a creepage distance, the material or the ribs of one are given: in vacuum from a tested surface or the practice of alumina, in nitrogen and sulphur hexafluoride at 80 kPa or more as in air, elsewhere from a tested surface; without one too short where the medium alone would need more, in oil and along joints of solids enough where pollution degree 1 in air would be, and unassessed between.",
 	Margin:  "marginal with less than 10 % in hand",
 	Concern: rule.Life,
 	Sources: []rule.Source{{Text: "IEC 60664-1:2020 Table F.5", Mark: rule.Read, Governs: true}},
@@ -53,12 +53,18 @@ var creepage = rule.Rule{
 	},
 	Judge: func(e *evidence.Evidence) rule.Judgement {
 		return each(e, func(s *chain.Spacing) (rule.Finding, string) {
-			if !s.Creepage.Set() && (!inAir(s) || s.Of != nil) {
+			if !s.Creepage.Set() && (!inAir(s) || s.Of != nil) && !surfaceTold(s) {
 				return rule.Finding{}, "creepage is judged on surfaces in air, and in other media where one is given"
 			}
 			return distance(e, s, "spacing.creepage", s.Creepage, func(x evidence.Spacing) gap.Result[quantity.Length] { return x.Assessment.CreepageNeeded }), ""
 		})
 	},
+}
+
+// surfaceTold reports whether what is told of a spacing in another medium than a solid is told
+// of a surface, so that there is one.
+func surfaceTold(s *chain.Spacing) bool {
+	return s.Of == nil && s.Medium.V != "solid" && (s.Material.Set() || s.CTI.Set() || s.Ribs != nil)
 }
 
 func otherGas(s *chain.Spacing) bool { return s.Medium.V == "gas" && s.Gas.Or("air") != "air" }
@@ -122,8 +128,11 @@ func furtherApart(e *evidence.Evidence, s *chain.Spacing, x evidence.Spacing, f 
 		return confirm
 	}
 	way := wider(s, given, need)
-	if f.Rule == "spacing.clearance" {
+	switch f.Rule {
+	case "spacing.clearance":
 		way = clearanceFor(e, s, x, way)
+	case "spacing.creepage":
+		way = alongBoth(s, x, need)
 	}
 	return alternatives(way, lowered(f.Rule, x), "lower the voltage")
 }

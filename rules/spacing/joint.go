@@ -4,6 +4,7 @@ import (
 	"kilovet/hv/chain"
 	"kilovet/hv/lack"
 	"kilovet/hv/quantity"
+	"kilovet/insulation/gap"
 	"kilovet/rules/evidence"
 	"kilovet/rules/limits"
 )
@@ -123,8 +124,10 @@ func againstBreakdown(e *evidence.Evidence, s *chain.Spacing, x evidence.Spacing
 	var size string
 	along := ""
 	if s.Creepage.Set() {
-		if l, err := x.SurfaceFor(comfortable(x)); err == nil {
-			along = resized(s, s.Creepage, l)
+		if l, note, err := longSurface(x); err == nil {
+			if along = resized(s, s.Creepage, l); along != "" {
+				along += note
+			}
 		}
 	}
 	switch across := againstBoth(e, s, x); {
@@ -136,4 +139,27 @@ func againstBreakdown(e *evidence.Evidence, s *chain.Spacing, x evidence.Spacing
 		size = conflict(s, x)
 	}
 	return alternatives(size, sided(s, x), medium(x), "lower the voltage")
+}
+
+// longSurface is the length of surface in vacuum whose flashover leaves the peak its comfortable
+// share, else the share that is allowed, where no longer surface is known; and what to say of
+// that.
+func longSurface(x evidence.Spacing) (l quantity.Length, note string, err error) {
+	if l, err = x.SurfaceFor(comfortable(x)); err == nil {
+		return l, "", nil
+	}
+	l, err = x.SurfaceFor(x.Asked() / limits.BreakdownShare)
+	return l, ", marginal still, no length with the margin being known", err
+}
+
+// alongBoth is the length of surface in vacuum with which its flashover is no obstacle either.
+func alongBoth(s *chain.Spacing, x evidence.Spacing, alone quantity.Length) string {
+	if x.Gap.Medium == gap.Vacuum {
+		if l, note, err := longSurface(x); err == nil && l > alone*(1+limits.DistanceMargin) {
+			if way := resized(s, s.Creepage, l); way != "" {
+				return way + note
+			}
+		}
+	}
+	return wider(s, s.Creepage, alone)
 }

@@ -137,8 +137,33 @@ func againstBreakdown(e *evidence.Evidence, s *chain.Spacing, x evidence.Spacing
 		size = along + across
 	case x.HasWork() && s.Clearance.Set() && x.Gap.Shape != nil:
 		size = conflict(s, x)
+	case !x.HasWork():
+		size = bareEnough(s, x)
 	}
 	return alternatives(size, sided(s, x), medium(x), "lower the voltage")
+}
+
+// stillMarginal is said of a size that is enough, but not with the margin.
+const stillMarginal = ", marginal still, no size with the margin being known"
+
+// bareEnough is the distance that leaves the peak the share that is allowed, where none is
+// known that leaves it the comfortable one; empty where it is there, and where no distance does.
+func bareEnough(s *chain.Spacing, x evidence.Spacing) string {
+	allowed := x.Asked() / limits.BreakdownShare
+	d, err := x.GapFor(allowed)
+	if err != nil || !s.Clearance.Set() {
+		return ""
+	}
+	if need := x.Assessment.ClearanceNeeded; need.Lack == nil {
+		d = max(d, need.Value*(1+limits.DistanceMargin))
+	}
+	if d, err = x.StandsFrom(d, allowed); err != nil {
+		return ""
+	}
+	if way := resized(s, s.Clearance, d); way != "" {
+		return way + stillMarginal
+	}
+	return ""
 }
 
 // longSurface is the length of surface in vacuum whose flashover leaves the peak its comfortable
@@ -149,7 +174,7 @@ func longSurface(x evidence.Spacing) (l quantity.Length, note string, err error)
 		return l, "", nil
 	}
 	l, err = x.SurfaceFor(x.Asked() / limits.BreakdownShare)
-	return l, ", marginal still, no length with the margin being known", err
+	return l, stillMarginal, err
 }
 
 // alongBoth is the length of surface in vacuum with which its flashover is no obstacle either.

@@ -39,9 +39,12 @@ func figures(e *evidence.Evidence) []figure.Figure {
 	return inTurn(parts...)
 }
 
-// potentials are listed under every name a node has.
+// potentials are listed under every name a node of the circuit has.
 func potentials(c *collector, e *evidence.Evidence) {
 	for _, node := range e.Chain().Nodes() {
+		if _, there := e.Layout().Node(node); !there {
+			continue
+		}
 		v, err := e.Potential(node)
 		add(c, "potential", node, evidence.Basis, v, err)
 	}

@@ -14,7 +14,13 @@ import (
 // mains to the chain too: 230 V of overvoltage category 2 have an impulse of 2.5 kV, for which
 // IEC 60664-1:2020 Tables F.1 and F.2 ask 1.5 mm in case A at pollution degree 2.
 func TestASpacingFromTheMainsNeedsNoHeaterFeed(t *testing.T) {
-	asMains(t, review(t, []byte(mainsChain), "faults"))
+	r := review(t, []byte(mainsChain), "faults")
+	asMains(t, r)
+	for _, f := range r.Figures {
+		if f.ID == "potential" && f.Subject == "mains" {
+			t.Errorf("the mains is no node of the circuit and has a potential of %g V", f.Value)
+		}
+	}
 }
 
 // mainsChain is a supply without a heater feed, and a spacing of the mains.

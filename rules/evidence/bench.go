@@ -2,13 +2,18 @@ package evidence
 
 import (
 	"kilovet/hv/circuit"
+	"kilovet/hv/lack"
 	"kilovet/hv/quantity"
 	"kilovet/hv/steady"
 )
 
 // Reads is the magnitude of the mean voltage between two nodes: what a voltmeter shows.
-// What is left of the difference of two equal potentials is nothing.
+// What is left of the difference of two equal potentials is nothing. Of the mains it tells
+// nothing, a lack: that it reads nothing there does not say that there is none.
 func (e *Evidence) Reads(at, to string) (quantity.Voltage, error) {
+	if e.OnMains(at) || e.OnMains(to) {
+		return 0, lack.Failed("the mains alternates: a voltmeter for direct voltage shows nothing of it")
+	}
 	s, err := e.swing(at, to)
 	if err != nil {
 		return 0, err

@@ -106,4 +106,9 @@ func TestThinSulphurHexafluoride(t *testing.T) {
 	if a, err := torr(gap.SulphurHexafluoride, 7.7); err != nil || a.AtLeast || a.Value < 1.5e3 {
 		t.Errorf("7.7 Torr cm: %v (%v)", a.Value, err)
 	}
+	for pd, known := range map[quantity.PressureLength]bool{0.2: true, 2: false, 9: false, 11: true} { // Pa m
+		if v, err := gas.AtProduct(gap.SulphurHexafluoride, pd); (err == nil) != known {
+			t.Errorf("a curve has %v at %v Pa m (%v)", v, pd, err)
+		}
+	}
 }

@@ -139,9 +139,13 @@ func remembered(g gap.Gas, source gap.Source, a gap.Answer[quantity.Voltage]) ga
 }
 
 // AtProduct is the breakdown voltage between plates at a product of pressure, at 20 °C,
-// and gap: that of UniformBreakdown, which by similarity holds for any such pair.
+// and gap: that of UniformBreakdown, which by similarity holds for any such pair. Where only
+// a lower bound is known there is a lack.
 func AtProduct(g gap.Gas, pd quantity.PressureLength) (quantity.Voltage, error) {
 	d := math.Max(float64(pd)/float64(referencePressure), 1e-3)
 	a, err := UniformBreakdown(State{Gas: g, Pressure: quantity.Pressure(float64(pd) / d), Temperature: referenceTemperature}, quantity.Length(d))
+	if err == nil && a.AtLeast {
+		err = lack.Range("only a lower bound of the breakdown of %s is known at %s", string(g), quantity.Text(pd))
+	}
 	return a.Value, err
 }

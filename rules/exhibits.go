@@ -11,6 +11,7 @@ func curves(e *evidence.Evidence) []exhibit.Curve {
 	return gather(e,
 		unless("fields", fieldPictures),
 		surfaceCurves,
+		gapCurves,
 		waveforms,
 		nodeWaveforms,
 		diodeWaveforms,

@@ -9,6 +9,7 @@ import (
 	"kilovet/hv/quantity"
 	"kilovet/insulation"
 	"kilovet/insulation/gap"
+	"kilovet/insulation/shape"
 	"kilovet/rules/build"
 )
 
@@ -34,22 +35,22 @@ func (e *Evidence) byField(s *chain.Spacing, x *Spacing) {
 		}
 	}
 	by := insulation.StrengthAlong(x.Gap, c.Line, x.Voltages.Sharp)
-	shape := "no closed shape"
+	closedBy := "no closed shape"
 	if x.Gap.Shape != nil {
-		shape = "closed shape, " + string(x.Gap.Shape.Kind) + f.ClosedFor()
+		closedBy = "closed shape, " + string(x.Gap.Shape.Kind) + f.ClosedFor()
 	}
 	x.Assessment.FieldPeak = gap.Result[quantity.Field]{Answer: gap.Answer[quantity.Field]{
 		Value:   c.Line.Peak(x.Voltages.Peak),
 		Because: fmt.Sprintf("computed field of %s, utilisation factor %.3g", f.Name.V, float64(c.Line.Utilisation())),
 		Sources: []gap.Source{{Text: "computed field of the described arrangement", Mark: gap.Derived, Governs: true}},
-		Shown:   besides(closed.FieldPeak, shape), Assumptions: f.Assumed,
+		Shown:   besides(closed.FieldPeak, closedBy), Assumptions: f.Assumed,
 	}}
 	by.Onset.Assumptions = slices.Concat(by.Onset.Assumptions, f.Assumed)
 	by.FieldLimit.Assumptions = slices.Concat(by.FieldLimit.Assumptions, f.Assumed)
 	by.Breakdown.Assumptions = slices.Concat(by.Breakdown.Assumptions, f.Assumed)
-	by.Onset.Shown = append(by.Onset.Shown, besides(closed.Onset, shape)...)
-	by.FieldLimit.Shown = append(by.FieldLimit.Shown, besides(closed.FieldLimit, shape)...)
-	by.Breakdown.Shown = append(by.Breakdown.Shown, besides(closed.Breakdown, shape)...)
+	by.Onset.Shown = append(by.Onset.Shown, besides(closed.Onset, closedBy)...)
+	by.FieldLimit.Shown = append(by.FieldLimit.Shown, besides(closed.FieldLimit, closedBy)...)
+	by.Breakdown.Shown = append(by.Breakdown.Shown, besides(closed.Breakdown, closedBy)...)
 	if c.Traced.Closed {
 		by.Breakdown = closed.Breakdown // an insulator stands in the way of the line
 	}
@@ -92,3 +93,16 @@ func (e *Evidence) criticalOf(s *chain.Spacing) (*build.Arrangement, Critical, e
 }
 
 func ends(s *chain.Spacing) []string { return append([]string{s.From.V}, s.Also.V...) }
+
+// CriticalLine is the line from the more highly stressed electrode of a spacing to the
+// other along which its field is highest, computed where the spacing is judged by a
+// computed field, else that of its shape.
+func (e *Evidence) CriticalLine(s *chain.Spacing) (shape.Line, error) {
+	if f, c, err := e.criticalOf(s); f != nil || err != nil {
+		return c.Line, err
+	}
+	if s.Shape == nil {
+		return shape.Line{}, lack.Key("spacing.shape")
+	}
+	return shape.Of(*shapeOf(s.Shape), s.Clearance.V)
+}

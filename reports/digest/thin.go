@@ -7,7 +7,7 @@ import (
 )
 
 // mostLines is how many lines of a curve can be told apart in a picture.
-const mostLines = 16
+const mostLines = 8
 
 // Thinned is a curve over time with at most so many of its lines as can be told apart,
 // from the first to the last, and its note says which; the results hold all of them.

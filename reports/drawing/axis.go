@@ -59,9 +59,15 @@ func newScale(axis exhibit.Axis, from, to float64, free bool) scale {
 // leastShown is what an axis tells from nought; nothing physical is as small.
 const leastShown = 1e-300
 
-// nearNought takes nought in where the values come as near to it as half their span.
+// nearNought takes nought in where the values come as near to it as half their span, and
+// ends at it what passes it by less than the width of a line.
 func nearNought(from, to float64) (float64, float64) {
+	const unseen = 1e-3
 	switch {
+	case from < 0 && -from < unseen*to:
+		return 0, to
+	case to > 0 && to < -unseen*from:
+		return from, 0
 	case from > 0 && from < (to-from)/2:
 		return 0, to
 	case to < 0 && -to < (to-from)/2:

@@ -12,6 +12,7 @@ import (
 	"gonum.org/v1/plot/vg/recorder"
 	"pgregory.net/rapid"
 
+	"kilovet/hv/quantity"
 	"kilovet/reports/digest"
 	"kilovet/reports/internal/sample"
 	"kilovet/rules/exhibit"
@@ -119,6 +120,9 @@ func TestTicks(t *testing.T) {
 	}{
 		{exhibit.Axis{What: "voltage", Unit: "V"}, 0, 22870, 5, false, "0 5 10 15 20 25", "voltage (kV)"},
 		{exhibit.Axis{What: "voltage", Unit: "V"}, -20e3, -100, 4, false, "-20 -15 -10 -5 0", "voltage (kV)"},
+		{exhibit.Axis{What: "current", Unit: "A"}, -22e-9, 9.8e-3, 5, false, "0 2 4 6 8 10", "current (mA)"},
+		{exhibit.Axis{What: "current", Unit: "A"}, -9.8e-3, 22e-9, 5, false, "-10 -8 -6 -4 -2 0", "current (mA)"},
+		{exhibit.Axis{What: "current", Unit: "A"}, -22e-6, 9.8e-3, 5, false, "-2 0 2 4 6 8 10", "current (mA)"},
 		{exhibit.Axis{What: "time", Unit: "s"}, 0, 40e-6, 4, true, "0 10 20 30 40", "time (µs)"},
 		{exhibit.Axis{What: "time", Unit: "s"}, 0, 7200, 4, true, "0 50 100", "time (min)"},
 		{exhibit.Axis{What: "ripple", Unit: "V"}, 1.2, 1.3, 5, false, "1.20 1.22 1.24 1.26 1.28 1.30", "ripple (V)"},
@@ -145,9 +149,12 @@ func TestTicksOfAnyValues(t *testing.T) {
 		parts := rapid.IntRange(1, 12).Draw(t, "parts")
 		a := newScale(exhibit.Axis{Unit: rapid.SampledFrom([]string{"V", "1", "s", "m", "Pa", "K", "ohm"}).Draw(t, "unit")}, from, to, false)
 		a.mark(parts, true)
-		// A value a billionth of a step beyond a round end, as rounding leaves it, counts
-		// as on it; no drawing shows that.
+		// A value a billionth of a step beyond a round end, as rounding leaves it, and one a
+		// thousandth of the axis beyond nought count as on it; no drawing shows that.
 		slack := 1e-9 * max(math.Abs(from), math.Abs(to), a.to-a.from)
+		if quantity.Equal(a.from, 0) || quantity.Equal(a.to, 0) {
+			slack = 1.01e-3 * (a.to - a.from)
+		}
 		if a.from > from+slack || a.to < to-slack || len(a.ticks) < 2 || len(a.ticks) > 2*parts+2 {
 			t.Fatalf("%d ticks from %g to %g for values from %g to %g", len(a.ticks), a.from, a.to, from, to)
 		}

@@ -80,8 +80,8 @@ func reviewPage(r *rules.Review, o Options) (*reviewed, error) {
 	for _, c := range r.Cautions {
 		p.Cautions = append(p.Cautions, fact{clean(c.Subject), clean(c.Text)})
 	}
-	for _, over := range r.PassedOver {
-		p.PassedOver = append(p.PassedOver, fact{clean(over.Rule), clean(over.Because)})
+	for _, over := range digest.PassedOver(r.PassedOver) {
+		p.PassedOver = append(p.PassedOver, fact{clean(over.Rules()), clean(over.Because)})
 	}
 	for _, in := range r.Inputs {
 		p.Inputs = append(p.Inputs, rules.Input{Role: clean(in.Role), Name: clean(in.Name), SHA256: clean(in.SHA256)})
@@ -131,7 +131,7 @@ func findings(r *rules.Review) []finding {
 	for i, f := range digest.Sorted(r.Findings) {
 		needed, provided := digest.Labels(f)
 		facts := filled(fact{"Concerns", string(f.Concern)}, fact{sentence(needed), digest.Needed(f)}, fact{sentence(provided), digest.Provided(f)},
-			fact{"Margin", digest.Margin(f)}, fact{"Under", f.Under}, fact{"Remedy", f.Remedy}, fact{"Missing", strings.Join(f.Missing, ", ")},
+			fact{"Margin", digest.Margin(f)}, fact{"Under", f.Under}, fact{"Remedy", f.Remedy}, fact{"Missing", digest.Lacking(f)},
 			fact{"Assumed", strings.Join(f.Assumptions, "; ")}, fact{"Where", digest.Place(r, f)})
 		out := finding{ID: fmt.Sprintf("finding-%d", i+1), Rule: clean(f.Rule), Subject: clean(f.Subject), Verdict: f.Verdict, Concern: f.Concern,
 			Because: clean(f.Because), Facts: facts}

@@ -152,7 +152,7 @@ func (n *writer) standing(c digest.Chapter, findings []rule.Finding) []Block {
 
 // reasons is why a finding is as it is, with what it rests on after what else is to say.
 func (n *writer) reasons(c digest.Chapter, f rule.Finding, below Line) Cell {
-	all := []Line{plain(f.Because), joined(labelled("Remedy:", f.Remedy), labelled("missing:", strings.Join(f.Missing, ", ")))}
+	all := []Line{plain(f.Because), joined(labelled("Remedy:", f.Remedy), labelled("missing:", digest.Lacking(f)))}
 	for _, a := range f.Assumptions {
 		all = append(all, labelled("Assumed:", a))
 	}

@@ -73,7 +73,7 @@ func (n *writer) metRule(c digest.Chapter, findings []rule.Finding, l *legend) [
 }
 
 func (n *writer) metRow(c digest.Chapter, f rule.Finding, l *legend, about []Line, source Line) Row {
-	reason := []Line{plain(f.Because), joined(labelled("Remedy:", f.Remedy), labelled("missing:", strings.Join(f.Missing, ", ")))}
+	reason := []Line{plain(f.Because), joined(labelled("Remedy:", f.Remedy), labelled("missing:", digest.Lacking(f)))}
 	for _, a := range f.Assumptions {
 		reason = append(reason, labelled("Assumed:", a))
 	}

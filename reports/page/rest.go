@@ -122,9 +122,21 @@ func (n *writer) remarks() []Section {
 	}
 	add("Assumptions", "assumptions", paragraphs(r.Assumptions))
 	add("Cautions", "cautions", factsOf(r.Cautions, func(c rule.Caution) Fact { return Fact{c.Subject, c.Text} }))
-	add("Rules passed over", "passed-over", halved(factsOf(r.PassedOver, func(p rule.PassedOver) Fact { return Fact{p.Rule, p.Because} })))
+	add("Rules passed over", "passed-over", passedOver(r))
 	add("Sources", "sources", n.sourceTable())
 	return sections
+}
+
+// passedOver tells each reason once, beside the rules that it holds for.
+func passedOver(r *rules.Review) []Block {
+	if len(r.PassedOver) == 0 {
+		return nil
+	}
+	t := Table{Columns: []Column{{Title: "Rules", Share: 0.5}, {Title: "Why they do not apply", Share: 0.5}}}
+	for _, p := range digest.PassedOver(r.PassedOver) {
+		t.Rows = append(t.Rows, Row{Cells: []Cell{lines(plain(p.Rules())), lines(small(p.Because))}})
+	}
+	return halved([]Block{t})
 }
 
 // sourceTable numbers the sources that findings refer to.

@@ -19,7 +19,7 @@ func everything(w *writer, r *rules.Review) {
 	figures(w, r)
 	exhibits(w, r)
 	pairs(w, "Cautions", r.Cautions, func(c rule.Caution) (string, string) { return c.Subject, c.Text })
-	pairs(w, "Passed over", r.PassedOver, func(p rule.PassedOver) (string, string) { return p.Rule, p.Because })
+	pairs(w, "Passed over", digest.PassedOver(r.PassedOver), func(p digest.Passed) (string, string) { return p.Rules(), p.Because })
 	pairs(w, "Assumptions", r.Assumptions, func(a string) (string, string) { return "", a })
 	provenance(w, r)
 }
@@ -40,7 +40,7 @@ func finding(w *writer, r *rules.Review, f rule.Finding) {
 	w.detail("", amounts(f))
 	w.detail("", f.Because)
 	w.detail("remedy", f.Remedy)
-	w.detail("missing", strings.Join(f.Missing, ", "))
+	w.detail("missing", digest.Lacking(f))
 	for _, a := range f.Assumptions {
 		w.detail("assumed", a)
 	}

@@ -30,7 +30,7 @@ func Gap(r *rules.Review, block string, o Options) []byte {
 		}
 	}
 	figures(w, r)
-	pairs(w, "Passed over", gapPassed(r), func(p rule.PassedOver) (string, string) { return p.Rule, p.Because })
+	pairs(w, "Passed over", digest.PassedOver(gapPassed(r)), func(p digest.Passed) (string, string) { return p.Rules(), p.Because })
 	w.head("To paste into a description")
 	for line := range strings.Lines(block) {
 		w.line(digest.Clean(strings.TrimRight(line, "\n")))

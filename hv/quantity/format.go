@@ -54,7 +54,16 @@ func DimensionOf(si string) *Dimension {
 	return nil
 }
 
+// fractionText writes a share in per cent or ppm; one that means nothing as a number is
+// "below 0.001 ppm".
 func fractionText(v float64) string {
+	const least = 1e-9 * (1 - 5e-5) // less what rounds up to it
+	switch {
+	case v > 0 && v < least:
+		return "below 0.001 ppm"
+	case v < 0 && v > -least:
+		return "above -0.001 ppm"
+	}
 	if a := math.Abs(v); a > 0 && a < 1e-3 {
 		return Significant(v*1e6) + " ppm"
 	}

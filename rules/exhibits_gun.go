@@ -162,20 +162,23 @@ func answering(e *evidence.Evidence) []exhibit.Table {
 	row := func(what string, here, fixed exhibit.Cell) {
 		t.Rows = append(t.Rows, []exhibit.Cell{exhibit.Words(what), here, fixed})
 	}
-	n := exhibit.Number[quantity.Fraction]
-	row("high voltage", n(quantity.Fraction(s.Here.Voltage)), n(quantity.Fraction(s.Fixed.Voltage)))
-	here, fixed, err := e.EmissionToTemperature()
-	row("temperature of the cathode", exhibit.OrWords(quantity.Fraction(here), err), exhibit.OrWords(quantity.Fraction(fixed), err))
+	n := exhibit.Exponent
+	row("high voltage", n(s.Here.Voltage), n(s.Fixed.Voltage))
+	if here, fixed, err := e.EmissionToTemperature(); err == nil {
+		row("temperature of the cathode", n(here), n(fixed))
+	} else {
+		row("temperature of the cathode", exhibit.Words(err.Error()), exhibit.Words(err.Error()))
+	}
 	none := exhibit.Words("")
 	if s.Here.Resistor != 0 {
-		row("bias resistor", n(quantity.Fraction(s.Here.Resistor)), none)
+		row("bias resistor", n(s.Here.Resistor), none)
 	}
 	if !e.DiodeGun() {
 		bias := none
 		if s.Here.Bias != 0 {
-			bias = n(quantity.Fraction(s.Here.Bias))
+			bias = n(s.Here.Bias)
 		}
-		row("bias voltage", bias, n(quantity.Fraction(s.Fixed.Bias)))
+		row("bias voltage", bias, n(s.Fixed.Bias))
 	}
 	return []exhibit.Table{t}
 }

@@ -5,6 +5,7 @@ import (
 	"slices"
 	"strings"
 
+	"kilovet/rules/exhibit"
 	"kilovet/rules/figure"
 	"kilovet/rules/rule"
 )
@@ -94,5 +95,14 @@ func (g *Group) put(f figure.Figure, column, columns int) {
 		i = len(g.Rows)
 		g.Rows = append(g.Rows, Row{subject, make([]string, columns)})
 	}
-	g.Rows[i].Values[column] = Amount(rule.Amount{Value: f.Value, Unit: f.Unit})
+	g.Rows[i].Values[column] = FigureText(f)
+}
+
+// FigureText writes the value of a figure for people. By how many per cent something
+// changes for one per cent of its cause is no share, and is written as it is.
+func FigureText(f figure.Figure) string {
+	if f.Unit == "1" && strings.HasPrefix(f.What, "relative change of ") {
+		return exhibit.Exponent(f.Value).Text
+	}
+	return Amount(rule.Amount{Value: f.Value, Unit: f.Unit})
 }

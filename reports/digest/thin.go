@@ -6,11 +6,15 @@ import (
 	"kilovet/rules/exhibit"
 )
 
-// mostLines is how many lines of a curve can be told apart in a picture.
-const mostLines = 8
+// Lines of a picture that can be told apart, and how many stand for those that cannot.
+const (
+	mostLines = 8
+	fewLines  = 4
+)
 
-// Thinned is a curve over time with at most so many of its lines as can be told apart,
-// from the first to the last, and its note says which; the results hold all of them.
+// Thinned is a curve over time of which, where it has more lines than can be told apart, a
+// few stand for all from the first to the last, and its note says which; the results hold
+// all of them.
 // Every other of those shown stands at an even place, so that what alternates along a
 // ladder is shown on both sides. Other curves, such as outlines, need every line.
 func Thinned(c exhibit.Curve) exhibit.Curve {
@@ -18,7 +22,7 @@ func Thinned(c exhibit.Curve) exhibit.Curve {
 	if n <= mostLines || c.X.Unit != "s" {
 		return c
 	}
-	each := (n + mostLines - 2) / (mostLines - 1)
+	each := (n + fewLines - 2) / (fewLines - 1)
 	if each%2 == 0 {
 		each++
 	}

@@ -3,7 +3,11 @@
 // whoever renders them only lays them out.
 package exhibit
 
-import "kilovet/hv/quantity"
+import (
+	"math"
+
+	"kilovet/hv/quantity"
+)
 
 // Chapter is the part of a review an exhibit belongs to.
 type Chapter string
@@ -127,8 +131,14 @@ func Number[Q ~float64](v Q) Cell {
 	return Cell{Value: &f}
 }
 
-// Exponent is a pure number that is no share of anything: it is shown as it is.
-func Exponent(v float64) Cell { return Cell{Text: quantity.Significant(v), Value: &v} }
+// Exponent is a pure number that is no share of anything: it is shown as it is. One under
+// a millionth is what numbers leave of nought, and is shown as such.
+func Exponent(v float64) Cell {
+	if math.Abs(v) < 1e-6 {
+		return Cell{Text: "0", Value: &v}
+	}
+	return Cell{Text: quantity.Significant(v), Value: &v}
+}
 
 // OrWords is the number, or the reason in words where there is none.
 func OrWords[Q ~float64](v Q, err error) Cell {

@@ -49,7 +49,7 @@ func columns(t exhibit.Table) (all []Column, narrow bool) {
 		case whole > line && spare <= 0 && w.number:
 			share = 1.3 * float64(w.least)
 		case whole > line && spare <= 0:
-			share = max(0.6*float64(w.least)+0.2*float64(w.whole), float64(min(w.whole, shortWords)))
+			share = max(0.6*float64(w.least)+0.3*float64(w.whole), float64(min(w.whole, shortWords)+1))
 		case whole > line:
 			share = float64(w.least) + float64(spare)*float64(w.whole-w.least)/float64(max(1, whole-least))
 		}

@@ -19,7 +19,7 @@ import (
 // printed reports whether the value of a figure stands in a cell that belongs to its
 // subject and its state: of a list, of a matrix, or of a table that is named for it.
 func printed(d *page.Document, f figure.Figure) bool {
-	value := digest.Amount(rule.Amount{Value: f.Value, Unit: f.Unit})
+	value := digest.FigureText(f)
 	subject := f.Subject
 	if subject == "" {
 		subject = "whole chain"

@@ -7,8 +7,11 @@ import (
 )
 
 // longAgain is how many runes a text has that is told once under a table instead of in
-// every row.
-const longAgain = 30
+// every row, longBeside one that stands in a column of such notes.
+const (
+	longAgain  = 30
+	longBeside = 16
+)
 
 // legend is texts that stand under a table, with the notes that refer to them in its
 // cells.
@@ -17,8 +20,8 @@ type legend struct {
 	lines   []Line
 }
 
-// newLegend takes, as they are read, the long texts of columns in which one comes more
-// than once.
+// newLegend takes, as they are read, the longer texts of columns in which a long one comes
+// more than once.
 func newLegend(rows [][]string) *legend {
 	l := &legend{letters: map[string]string{}}
 	if len(rows) == 0 {
@@ -53,7 +56,7 @@ func again(rows [][]string, column int) bool {
 func long(text string) bool { return utf8.RuneCountInString(text) > longAgain }
 
 func (l *legend) take(text string) {
-	if !long(text) || l.letters[text] != "" {
+	if utf8.RuneCountInString(text) <= longBeside || l.letters[text] != "" {
 		return
 	}
 	l.letters[text] = "note " + lettered(len(l.lines))

@@ -1,6 +1,7 @@
 package diagram_test
 
 import (
+	"fmt"
 	"os"
 	"path/filepath"
 	"slices"
@@ -311,6 +312,32 @@ func TestMarks(t *testing.T) {
 	}
 	if len(marked[3]) != 12 || !slices.Equal(marked[1], []string{"divider.tap"}) || !slices.Equal(marked[2], []string{"filter.1.resistor"}) || !slices.Equal(marked[4], []string{"divider.upper"}) {
 		t.Errorf("%v", marked)
+	}
+}
+
+// A group is marked on a part that has no mark of its own, and hides a lesser one only.
+func TestMarksDoNotHideEachOther(t *testing.T) {
+	for _, c := range []struct {
+		findings []rule.Finding
+		want     string
+	}{
+		{[]rule.Finding{finding("resistor.voltage", "divider.upper", rule.Fails), finding("divider.error", "divider", rule.Marginal)}, "divider.upper 1, divider.lower 2, divider.meter 0, divider.clamp 0"},
+		{[]rule.Finding{finding("resistor.voltage", "divider.upper", rule.Marginal), finding("divider.error", "divider", rule.Fails)}, "divider.upper 2, divider.lower 1, divider.meter 0, divider.clamp 0"},
+		{[]rule.Finding{finding("resistor.voltage", "divider.upper", rule.Unassessed), finding("resistor.voltage", "divider.lower", rule.Unassessed), finding("divider.meter_voltage", "divider.meter", rule.Marginal),
+			finding("divider.clamp", "divider.clamp", rule.Marginal), finding("divider.error", "divider", rule.Fails)}, "divider.upper 1, divider.lower 3, divider.meter 4, divider.clamp 5"},
+		{[]rule.Finding{finding("resistor.voltage", "divider.upper", rule.Fails), finding("resistor.voltage", "divider.lower", rule.Fails), finding("divider.meter_voltage", "divider.meter", rule.Fails),
+			finding("divider.clamp", "divider.clamp", rule.Fails), finding("divider.error", "divider", rule.Marginal)}, "divider.upper 1, divider.lower 2, divider.meter 3, divider.clamp 4"},
+	} {
+		d, _ := draw(t, chains(t)["column"], c.findings...)
+		var got []string
+		for _, p := range d.Parts() {
+			if strings.HasPrefix(p.Name, "divider.") {
+				got = append(got, fmt.Sprint(p.Name, " ", p.Mark))
+			}
+		}
+		if text := strings.Join(got, ", "); text != c.want {
+			t.Errorf("%v: %s", c.findings, text)
+		}
 	}
 }
 

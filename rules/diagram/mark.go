@@ -26,9 +26,9 @@ func (d *Diagram) mark(findings []rule.Finding) {
 	})
 	for i := range marks {
 		marks[i].Number = i + 1
-		d.put(marks[i])
 	}
 	d.Marks = marks
+	d.put()
 }
 
 // noted adds a finding to the mark of its subject.
@@ -56,22 +56,59 @@ func (p *Part) belongs(subject string) bool {
 	return subject != "" && (p.Name == subject || strings.HasPrefix(p.Name, subject+"."))
 }
 
-// put writes a mark's number on what it speaks of: the part or node of that name,
-// all parts of a kind of the ladder, of other groups the first.
-func (d *Diagram) put(m Mark) {
+// put writes the numbers of all marks on what they speak of: first each on the part or
+// node of its name, then those of groups on parts without a mark of their own, all such of
+// a kind of the ladder, the first of other groups. What the drawing has no room for is
+// in the list of flags alone.
+func (d *Diagram) put() {
+	var groups []Mark
+	for _, m := range d.Marks {
+		if !d.putOn(m) {
+			groups = append(groups, m)
+		}
+	}
+	for _, m := range groups {
+		d.putWithin(m)
+	}
+}
+
+// putOn marks the part or node of a mark's name, if there is one.
+func (d *Diagram) putOn(m Mark) bool {
 	for _, n := range d.Nodes() {
 		if n.Name == m.Subject {
 			n.Mark = m.Number
-			return
+			return true
 		}
 	}
+	for _, p := range d.Parts() {
+		if p.Name == m.Subject {
+			p.Mark = m.Number
+			return true
+		}
+	}
+	return false
+}
+
+// putWithin marks the parts of a group that bear no mark or, where none is free, the first
+// of them in place of a lesser mark.
+func (d *Diagram) putWithin(m Mark) {
+	var first *Part
 	for _, p := range d.Parts() {
 		if !p.belongs(m.Subject) {
 			continue
 		}
+		if first == nil {
+			first = p
+		}
+		if p.Mark > 0 {
+			continue
+		}
 		p.Mark = m.Number
-		if !strings.HasPrefix(m.Subject, "multiplier.") {
+		if first = p; !strings.HasPrefix(m.Subject, "multiplier.") {
 			return
 		}
+	}
+	if first.Mark > m.Number { // the worst come first
+		first.Mark = m.Number
 	}
 }

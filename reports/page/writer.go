@@ -34,6 +34,11 @@ func newWriter(r *rules.Review) *writer {
 	for i, f := range digest.Sorted(r.Findings) {
 		n.anchors[about{f.Rule, f.Subject}] = fmt.Sprintf("finding-%d", i+1)
 	}
+	for _, same := range clusters(digest.Sorted(r.Findings)) {
+		for _, f := range same {
+			n.anchors[about{f.Rule, f.Subject}] = n.anchorOf(same[0])
+		}
+	}
 	for k, c := range n.parts {
 		c.Tables = slices.DeleteFunc(c.Tables, func(t exhibit.Table) bool { return t.Detail })
 		n.parts[k].Tables = c.Tables

@@ -1,0 +1,52 @@
+package page_test
+
+import (
+	"fmt"
+	"strings"
+	"testing"
+
+	"kilovet/reports/internal/sample"
+	"kilovet/reports/page"
+	"kilovet/rules/rule"
+)
+
+// unanswered are so many findings that differ in their subject alone.
+func unanswered(count int, v rule.Verdict) (all []rule.Finding) {
+	for i := range count {
+		all = append(all, rule.Finding{Rule: "fault.computed", Subject: fmt.Sprintf("diode %d open", i+1), Verdict: v, Concern: rule.Equipment, Because: "its consequences are not known"})
+	}
+	return all
+}
+
+// Findings that say the same of several subjects stand once and name them all; what leads
+// to one of them leads there.
+func TestFindingsThatSayTheSameStandOnce(t *testing.T) {
+	r := sample.Sound()
+	r.Findings = append(unanswered(40, rule.Unassessed), rule.Finding{Rule: "fault.computed", Subject: "diode 7 shorted", Verdict: rule.Unassessed, Concern: rule.Equipment, Because: "another reason"})
+	text := outline(page.New(r))
+	body := text[strings.Index(text, `section "Faults"`):]
+	if got := strings.Count(body, "its consequences are not known"); got != 1 {
+		t.Errorf("the reason stands %d times", got)
+	}
+	for _, want := range []string{"40 of the same, named with the reason", "Of: diode 1 open; diode 2 open; ", "; diode 40 open]", "another reason"} {
+		if !strings.Contains(body, want) {
+			t.Errorf("%q is missing in\n%s", want, body)
+		}
+	}
+}
+
+// A few have a row each, as have those that meet.
+func TestAFewFindingsHaveARowEach(t *testing.T) {
+	for _, c := range []struct {
+		count   int
+		verdict rule.Verdict
+	}{{2, rule.Unassessed}, {5, rule.Meets}} {
+		r := sample.Sound()
+		r.Findings = unanswered(c.count, c.verdict)
+		text := outline(page.New(r))
+		body := text[strings.Index(text, `section "Faults"`):]
+		if got := strings.Count(body, "its consequences are not known"); got != c.count {
+			t.Errorf("%d findings that are %s: the reason stands %d times", c.count, c.verdict, got)
+		}
+	}
+}

@@ -8,8 +8,12 @@ import (
 	"kilovet/rules/rule"
 )
 
-// fewAlike is how many findings that differ in their subject alone have a row each.
-const fewAlike = 2
+// Findings that differ in their subject alone: so few have a row each, and so many share
+// one, lest it fill a sheet.
+const (
+	fewAlike  = 2
+	mostAlike = 24
+)
 
 // clusters puts findings together that differ in their subject alone, in the order of the
 // first of each; those with amounts, and a few, stay apart.
@@ -24,13 +28,11 @@ func clusters(findings []rule.Finding) (all [][]rule.Finding) {
 	}
 	var out [][]rule.Finding
 	for _, c := range all {
-		if len(c) > fewAlike {
-			out = append(out, c)
-			continue
+		size := mostAlike
+		if len(c) <= fewAlike {
+			size = 1
 		}
-		for _, f := range c {
-			out = append(out, []rule.Finding{f})
-		}
+		out = slices.AppendSeq(out, slices.Chunk(c, size))
 	}
 	return out
 }

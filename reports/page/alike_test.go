@@ -18,17 +18,17 @@ func unanswered(count int, v rule.Verdict) (all []rule.Finding) {
 	return all
 }
 
-// Findings that say the same of several subjects stand once and name them all; what leads
-// to one of them leads there.
+// Findings that say the same of several subjects stand together and name them all, so many
+// as a sheet holds well.
 func TestFindingsThatSayTheSameStandOnce(t *testing.T) {
 	r := sample.Sound()
 	r.Findings = append(unanswered(40, rule.Unassessed), rule.Finding{Rule: "fault.computed", Subject: "diode 7 shorted", Verdict: rule.Unassessed, Concern: rule.Equipment, Because: "another reason"})
 	text := outline(page.New(r))
 	body := text[strings.Index(text, `section "Faults"`):]
-	if got := strings.Count(body, "its consequences are not known"); got != 1 {
+	if got := strings.Count(body, "its consequences are not known"); got != 2 {
 		t.Errorf("the reason stands %d times", got)
 	}
-	for _, want := range []string{"40 of the same, named with the reason", "Of: diode 1 open; diode 2 open; ", "; diode 40 open]", "another reason"} {
+	for _, want := range []string{"24 of the same, named with the reason", "Of: diode 1 open; diode 2 open; ", "; diode 24 open]", "16 of the same, named with the reason", "Of: diode 25 open; ", "; diode 40 open]", "another reason"} {
 		if !strings.Contains(body, want) {
 			t.Errorf("%q is missing in\n%s", want, body)
 		}

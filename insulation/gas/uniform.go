@@ -44,8 +44,8 @@ func uniformLaw(x quantity.Length) quantity.Voltage {
 // of air, which it meets within 1 % at 1 cm. Sulphur hexafluoride: the streamer criterion,
 // under 0.1 mm at normal density a lower bound. The other gases: Paschen's law where its
 // constants hold: hydrogen to some 4400, argon to 340, helium to 36 Torr cm, carbon
-// dioxide nowhere past its minimum. Left of the minimum the longest path breaks down first: the answer
-// is the minimum itself. Gaps under 10 µm and pressures above 1 MPa are a lack.
+// dioxide nowhere past its minimum. Left of the minimum the longest path breaks down first:
+// the answer is the minimum itself. Gaps under 10 µm and pressures above 1 MPa are a lack.
 func UniformBreakdown(s State, d quantity.Length) (gap.Answer[quantity.Voltage], error) {
 	switch {
 	case d < shortestGap:

@@ -19,10 +19,10 @@ type HoldOptions struct {
 }
 
 // Hold finds the peak of the drive at which the mean of a node is a set voltage, within a
-// part in 1e8, a swift search in 1e6, and the state there. Both are sought together, drive and state made larger
-// or smaller at once; where that does not get there, trial by trial. It is a lack where
-// the load pulls the node to nothing, where there is no such node, and where no peak is
-// found in a dozen trials.
+// part in 1e8, a swift search in 1e6, and the state there. Both are sought together, drive
+// and state made larger or smaller at once; where that does not get there, trial by trial.
+// It is a lack where the load pulls the node to nothing, where there is no such node, and
+// where no peak is found in a dozen trials.
 func Hold(o HoldOptions) (quantity.Voltage, *Periodic, error) {
 	if peak, p, err := o.together(0); err == nil {
 		return peak, p, nil

@@ -57,6 +57,8 @@ func Arc(c *circuit.Circuit, from State, o ArcOptions) (*Discharge, error) {
 		return nil, err
 	}
 	a := &arc{flight: f, hold: float64(o.Hold), index: len(c.Elements)}
+	view := Periodic{Circuit: f.c, track: f.track}
+	a.branches = view.branches(a.index, true)
 	if a.hold == 0 {
 		a.hold = 1e-3
 	}
@@ -84,13 +86,14 @@ func struck(c *circuit.Circuit, o ArcOptions) *circuit.Circuit {
 // arc is an arc under way.
 type arc struct {
 	*flight
-	hold   float64
-	index  int
-	last   float64 // instant at which the current was last above hold
-	begun  bool
-	moved  float64 // charge shared out at once
-	held   float64 // energy before
-	wasted float64 // energy lost in that
+	hold     float64
+	index    int
+	branches []branch // of the arc
+	last     float64  // instant at which the current was last above hold
+	begun    bool
+	moved    float64 // charge shared out at once
+	held     float64 // energy before
+	wasted   float64 // energy lost in that
 }
 
 // ceased looks at the last step; it ends a flight without drive once the current has
@@ -100,9 +103,9 @@ func (a *arc) ceased() bool {
 		a.begun = true
 		a.share()
 	}
-	view := a.ledger.view
+	view := Periodic{Circuit: a.c, track: a.track}
 	for k := range a.track.steps {
-		y := view.current(a.ledger.branches[a.index], k)
+		y := view.current(a.branches, k)
 		for j := range y {
 			if math.Abs(y[j]) >= a.hold && j > 0 {
 				a.last = a.track.steps[k].start + a.track.steps[k].length
@@ -114,12 +117,11 @@ func (a *arc) ceased() bool {
 
 // share is what moves at once when ideal connections join capacitors.
 func (a *arc) share() {
-	view := a.ledger.view
-	for i := range a.ledger.branches[a.index] {
-		b := &a.ledger.branches[a.index][i]
+	for i := range a.branches {
+		b := &a.branches[i]
 		for k := range a.capacitors {
 			if c := &a.capacitors[k]; &a.c.Elements[c.element] == b.element {
-				a.moved += b.sign * c.value * (view.track.stages(0, &b.span)[3] - a.before[k])
+				a.moved += b.sign * c.value * (a.track.stages(0, &b.span)[3] - a.before[k])
 			}
 		}
 	}

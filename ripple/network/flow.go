@@ -134,6 +134,9 @@ func (y *samples) peak(euler bool, most float64) float64 {
 		return most
 	}
 	p := through(y[0], y[1], y[2], y[3])
+	if p.monotonic() {
+		return most
+	}
 	if low, high := p.hull(); low >= -most && high <= most {
 		return most
 	}

@@ -37,13 +37,27 @@ func (s *Stresses) Of(name string) Stress {
 // ledger adds up stresses step by step.
 type ledger struct {
 	Stresses
-	view     *Periodic
-	branches [][]branch
-	spans    []span
-	plain    []branch  // by element: itself, of a diode with its junction
-	parts    [][]part  // by element: of a tie, whose currents add up to its own
-	last     []float64 // current at the end of the step before
-	whole    []samples // current in the step, that of a diode with its junction's
+	accounts []account
+	ties     []tieAccount
+	last     []float64    // by element: current at the end of the step before
+	whole    [][3]float64 // by element that a tie needs: current at the stages, that of a diode with its junction's
+}
+
+// account is an element whose current is i₀ + g·v + c·dv/dt, and that of a diode or coil.
+type account struct {
+	span
+	index       int     // of the element
+	i0, g, c    float64 // c but for the junction of a diode
+	junction    float64
+	diode, coil int  // or −1
+	needed      bool // by a tie
+}
+
+// tieAccount is an element whose current is the sum of others'.
+type tieAccount struct {
+	span
+	index int // of the element
+	parts []part
 }
 
 // part is an element whose current is a part of another's.
@@ -54,105 +68,82 @@ type part struct {
 
 func newLedger(s *system) *ledger {
 	n := len(s.c.Elements)
-	l := &ledger{Stresses: Stresses{s.c, make([]Stress, n)}, view: &Periodic{Circuit: s.c, track: &track{system: s}},
-		branches: make([][]branch, n), spans: make([]span, n), plain: make([]branch, n), parts: make([][]part, n), last: make([]float64, n), whole: make([]samples, n)}
+	l := &ledger{Stresses: Stresses{s.c, make([]Stress, n)}, last: make([]float64, n), whole: make([][3]float64, n)}
+	view := Periodic{Circuit: s.c, track: &track{system: s}}
+	needed := make([]bool, n)
 	for i := range s.c.Elements {
-		e := &s.c.Elements[i]
 		l.of[i].Least, l.of[i].Greatest = quantity.Voltage(math.Inf(1)), quantity.Voltage(math.Inf(-1))
-		l.branches[i] = l.view.branches(i, true)
-		l.spans[i] = l.view.spanOf(e)
-		if !isTie(e) {
-			l.plain[i] = l.branches[i][0]
-			continue
-		}
-		for k := range l.branches[i] {
-			b := &l.branches[i][k]
-			l.parts[i] = append(l.parts[i], part{b.index, b.sign})
+		if e := &s.c.Elements[i]; isTie(e) {
+			if t := view.tieAccount(i); t.parts != nil {
+				l.ties = append(l.ties, t)
+				for _, p := range t.parts {
+					needed[p.element] = true
+				}
+			}
 		}
 	}
+	l.accounts = s.accounts(needed)
 	return l
+}
+
+// tieAccount is the account of a tie; nothing hangs on one without parts.
+func (p *Periodic) tieAccount(i int) tieAccount {
+	t := tieAccount{span: p.spanOf(&p.Circuit.Elements[i]), index: i}
+	for _, b := range p.branches(i, true) {
+		t.parts = append(t.parts, part{b.index, b.sign})
+	}
+	return t
+}
+
+// accounts are those of all elements that are no ties.
+func (s *system) accounts(needed []bool) []account {
+	var list []account
+	for i := range s.c.Elements {
+		e := &s.c.Elements[i]
+		if isTie(e) {
+			continue
+		}
+		a := account{span: s.between(e.From, e.To), index: i, diode: -1, coil: -1, needed: needed[i]}
+		switch e.Kind {
+		case circuit.Resistor:
+			a.g = 1 / float64(e.Resistance)
+		case circuit.Sink:
+			a.i0 = float64(e.Current)
+		case circuit.Capacitor:
+			a.c = float64(e.Capacitance)
+		case circuit.Diode:
+			a.junction = float64(e.Rectifier.Junction)
+		}
+		list = append(list, a)
+	}
+	s.assign(list)
+	return list
+}
+
+// assign tells the accounts of diodes and coils which they are.
+func (s *system) assign(list []account) {
+	at := make([]*account, len(s.c.Elements))
+	for i := range list {
+		at[list[i].index] = &list[i]
+	}
+	for k := range s.diodes {
+		a := at[s.diodes[k].element]
+		a.diode, a.g = k, s.diodes[k].leak
+	}
+	for k := range s.inductors {
+		at[s.inductors[k].element].coil = k
+	}
 }
 
 // enter adds the steps of a track.
 func (l *ledger) enter(t *track) {
-	l.view.track = t
 	for k := range t.steps {
-		for i := range l.of {
-			if l.parts[i] == nil {
-				l.add(i, k)
-			}
+		p := newPage(t, k)
+		for i := range l.accounts {
+			l.add(&l.accounts[i], &p)
 		}
-		for i := range l.of {
-			if l.parts[i] != nil {
-				l.gather(i, k)
-			}
+		for i := range l.ties {
+			l.gather(&l.ties[i], &p)
 		}
 	}
-}
-
-// add enters one step of an element.
-func (l *ledger) add(i, k int) {
-	if l.plain[i].element == nil { // a tie that nothing hangs on
-		return
-	}
-	v := l.view.track.stages(k, &l.spans[i])
-	y := l.view.track.currentAt(&l.plain[i], k, &v)
-	l.whole[i] = y
-	if e := l.plain[i].element; e.Kind == circuit.Diode && e.Rectifier.Junction > 0 {
-		j := l.view.track.charging(k, &v, float64(e.Rectifier.Junction))
-		for m := range j {
-			l.whole[i][m] += j[m]
-		}
-	}
-	l.book(i, k, &v, y)
-}
-
-// gather enters one step of a tie.
-func (l *ledger) gather(i, k int) {
-	var y samples
-	for _, p := range l.parts[i] {
-		for m, x := range l.whole[p.element] {
-			y[m] += p.sign * x
-		}
-	}
-	v := l.view.track.stages(k, &l.spans[i])
-	l.book(i, k, &v, y)
-}
-
-// book enters voltage and current of one step.
-func (l *ledger) book(i, k int, v *samples, y samples) {
-	st, s := &l.view.track.steps[k], &l.of[i]
-	s.Least, s.Greatest = v.widen(st.euler, s.Least, s.Greatest)
-	y[0], l.last[i] = l.last[i], y[3]
-	s.Peak = quantity.Current(y.peak(st.euler, float64(s.Peak)))
-	for j, c := range share {
-		s.Charge += quantity.Charge(c * st.length * y[j+1])
-		s.Energy += quantity.Energy(c * st.length * y[j+1] * v[j+1])
-	}
-}
-
-// reaches is the first instant within a track at which a voltage times sign reaches a
-// level, infinite where it does not, and the highest it has at the end of a step.
-func (t *track) reaches(s *span, sign, level float64) (at, highest float64) {
-	at, highest = math.Inf(1), math.Inf(-1)
-	for k := range t.steps {
-		st := &t.steps[k]
-		y := t.stages(k, s)
-		highest = max(highest, sign*y[3])
-		if !math.IsInf(at, 1) {
-			continue
-		}
-		for j := range y {
-			y[j] = sign*y[j] - level
-		}
-		p := y.polynomial(st.euler)
-		if _, high := p.hull(); high > 0 {
-			if x := p.rise(0); x <= 1 {
-				at = st.start + x*st.length
-			} else if p[0] >= 0 {
-				at = st.start
-			}
-		}
-	}
-	return at, highest
 }

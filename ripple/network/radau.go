@@ -64,13 +64,21 @@ type cubic [4]float64
 // through is the cubic through the start and the three stages of a step: the
 // collocation polynomial.
 func through(y0, y1, y2, y3 float64) cubic {
-	d01 := (y1 - y0) / node1
-	d12 := (y2 - y1) / (node2 - node1)
-	d23 := (y3 - y2) / (1 - node2)
-	d012 := (d12 - d01) / node2
-	d123 := (d23 - d12) / (1 - node1)
+	d01 := (y1 - y0) * (1 / node1)
+	d12 := (y2 - y1) * (1 / (node2 - node1))
+	d23 := (y3 - y2) * (1 / (1 - node2))
+	d012 := (d12 - d01) * (1 / node2)
+	d123 := (d23 - d12) * (1 / (1 - node1))
 	c := d123 - d012
 	return cubic{y0, d01 - node1*d012 + node1*node2*c, d012 - (node1+node2)*c, c}
+}
+
+// slopes are those at the stages of the cubic that is zero at the start and one at a
+// stage, by stage and by that.
+var slopes = [3][3]float64{
+	{3.22474487139158904909864203735, 1.16784008469040549492404127222, -0.253197264742180826185942419922},
+	{-3.56784008469040549492404127222, 0.775255128608410950901357962647, 1.05319726474218082618594241992},
+	{5.53197264742180826185942419922, -7.53197264742180826185942419922, 5},
 }
 
 // parabola is the polynomial through the three stages alone. It leaves out a fast
@@ -85,6 +93,13 @@ func parabola(y1, y2, y3 float64) cubic {
 
 func (p *cubic) at(x float64) float64    { return p[0] + x*(p[1]+x*(p[2]+x*p[3])) }
 func (p *cubic) slope(x float64) float64 { return p[1] + x*(2*p[2]+x*3*p[3]) }
+
+// monotonic reports whether the cubic surely only rises or only falls on [0, 1]: the Bézier
+// points of its slope have one sign.
+func (p *cubic) monotonic() bool {
+	b1, b2 := p[1]+p[2], p[1]+2*p[2]+3*p[3]
+	return p[1] >= 0 && b1 >= 0 && b2 >= 0 || p[1] <= 0 && b1 <= 0 && b2 <= 0
+}
 
 // hull holds the cubic on [0, 1]: the least and greatest of its Bézier points.
 func (p *cubic) hull() (low, high float64) {

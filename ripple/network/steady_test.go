@@ -17,7 +17,7 @@ func near(t *testing.T, what string, got, want, part float64) {
 	}
 }
 
-func node(t *testing.T, c *circuit.Circuit, name string) circuit.Node {
+func node(t testing.TB, c *circuit.Circuit, name string) circuit.Node {
 	t.Helper()
 	n, ok := c.Node(name)
 	if !ok {

@@ -93,25 +93,51 @@ func (y *samples) polynomial(euler bool) cubic {
 
 // widen widens a range to what the quantity does over the step.
 func (y *samples) widen(euler bool, least, greatest quantity.Voltage) (quantity.Voltage, quantity.Voltage) {
+	if euler {
+		return min(least, quantity.Voltage(y[3])), max(greatest, quantity.Voltage(y[3]))
+	}
 	if low, high := y.reach(); low >= float64(least) && high <= float64(greatest) {
 		return least, greatest
 	}
-	p := y.polynomial(euler)
-	if low, high := p.hull(); low >= float64(least) && high <= float64(greatest) {
-		return least, greatest
+	p := through(y[0], y[1], y[2], y[3])
+	low, high := y[0], y[3]
+	if p.monotonic() {
+		if low > high {
+			low, high = high, low
+		}
+	} else if low, high = p.hull(); low < float64(least) || high > float64(greatest) {
+		low, high = p.extremes()
 	}
-	low, high := p[0], p[0]
+	if low < float64(least) {
+		least = quantity.Voltage(low)
+	}
+	if high > float64(greatest) {
+		greatest = quantity.Voltage(high)
+	}
+	return least, greatest
+}
+
+// extremes are the least and the greatest of the cubic on [0, 1].
+func (p *cubic) extremes() (low, high float64) {
+	low, high = p[0], p[0]
 	for _, x := range p.turns() {
 		v := p.at(x)
 		low, high = min(low, v), max(high, v)
 	}
-	return min(least, quantity.Voltage(low)), max(greatest, quantity.Voltage(high))
+	return low, high
 }
 
 // reach is what a cubic through samples surely stays within: it leaves their range by
 // less than the range itself.
 func (y *samples) reach() (low, high float64) {
-	low, high = min(y[0], y[1], y[2], y[3]), max(y[0], y[1], y[2], y[3])
+	low, high = y[0], y[0]
+	for _, v := range y[1:] {
+		if v > high {
+			high = v
+		} else if v < low {
+			low = v
+		}
+	}
 	return low - (high - low), high + (high - low)
 }
 

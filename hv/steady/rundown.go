@@ -18,10 +18,12 @@ type rundown struct {
 
 	mesh    *mesh
 	factors *factors
-	still   feed      // conductances and currents without the diodes
+	always  feed      // conductances and currents of the wires
+	still   feed      // those with the capacitors in an implicit Euler stage
 	g       []float64 // by slot, with the diodes
 	current []float64 // by joint, fed in
 	v       []float64 // by joint
+	most    float64   // largest capacitor voltage
 	diode   float64   // ohm, common to all diodes that conduct; zero for ideal ones
 	gOn     float64   // of a conducting diode
 	lost    bool      // the diodes did not settle
@@ -44,6 +46,7 @@ type edge struct {
 type store struct {
 	edge
 	c, u, start float64
+	end         float64         // of the stage
 	g           float64         // of an implicit Euler stage
 	rise        [stages]float64 // slopes of the stages times the step
 }
@@ -127,8 +130,14 @@ func (r *rundown) weave() {
 	r.eachEdge(func(e *edge) { e.slot = r.mesh.slot(e.from, e.to) })
 	r.factors = r.mesh.newFactors()
 	joints := r.net.joints
-	r.still = feed{make([]float64, r.mesh.size), make([]float64, joints), make([]float64, joints)}
+	r.always, r.still = newFeed(r.mesh.size, joints), newFeed(r.mesh.size, joints)
+	for i := range r.wires {
+		w := &r.wires[i]
+		r.always.lay(&w.edge, w.g)
+		r.always.drive(&w.edge, w.g)
+	}
 	r.g, r.current, r.v = make([]float64, r.mesh.size), make([]float64, joints), make([]float64, joints)
+	r.most = r.highest()
 }
 
 func (r *rundown) eachEdge(visit func(*edge)) {
@@ -153,6 +162,10 @@ type feed struct {
 	sum     []float64 // by joint, of all conductances there
 }
 
+func newFeed(slots, joints int) feed {
+	return feed{make([]float64, slots), make([]float64, joints), make([]float64, joints)}
+}
+
 // lay adds the conductance of an edge.
 func (f *feed) lay(e *edge, g float64) {
 	if e.slot == noSlot {
@@ -163,26 +176,30 @@ func (f *feed) lay(e *edge, g float64) {
 	f.sum[e.to] += g
 }
 
-// drive adds the current of an edge that carries g·(voltage − emf).
-func (f *feed) drive(e *edge, g, emf float64) {
+// drive adds the current of a conductance.
+func (f *feed) drive(e *edge, g float64) {
 	if e.slot == noSlot {
 		return
 	}
-	i := g * (emf - e.offset)
+	i := -g * e.offset
 	f.current[e.from] += i
 	f.current[e.to] -= i
 }
 
-func (f *feed) clear() {
-	clear(f.g)
-	clear(f.sum)
+// copy takes what another feed has.
+func (f *feed) copy(o *feed) {
+	copy(f.g, o.g)
+	copy(f.current, o.current)
+	copy(f.sum, o.sum)
 }
 
 // highest is the largest capacitor voltage.
 func (r *rundown) highest() float64 {
 	most := 0.0
 	for i := range r.stores {
-		most = max(most, math.Abs(r.stores[i].u))
+		if u := math.Abs(r.stores[i].u); u > most {
+			most = u
+		}
 	}
 	return most
 }

@@ -55,7 +55,7 @@ type pace struct {
 func (r *rundown) run(p pace, see func(t float64)) error {
 	r.jump()
 	see(0)
-	for t, h := 0.0, firstStep; t < horizon && r.highest() > p.done; {
+	for t, h := 0.0, firstStep; t < horizon && r.most > p.done; {
 		strain := r.step(h, p)
 		if strain > 1 && h > firstStep/growth {
 			h *= math.Max(0.2, 0.9/math.Cbrt(strain))
@@ -78,48 +78,58 @@ func (r *rundown) jump() {
 	const instant = 1e-3 * firstStep
 	r.prepare(instant)
 	for range 2 {
-		for i := range r.stores {
-			r.stores[i].start = r.stores[i].u
-		}
+		r.begin(0)
 		r.settle()
 		for i := range r.stores {
 			r.stores[i].u = r.over(&r.stores[i].edge)
 		}
-		r.eachFlow(func(f *flow, current float64) { f.charge += instant * current })
+		r.flows(1, 0)
+		r.passed(instant)
 	}
+	r.most = r.highest()
 }
 
 // step tries a step of length h. It reports its doubt in units of the tolerance.
 func (r *rundown) step(h float64, p pace) (strain float64) {
 	r.prepare(gamma * h)
 	for stage := range stages {
-		for i := range r.stores {
-			r.stores[i].begin(&weights[stage], stage)
-		}
+		r.begin(stage)
 		r.settle()
 		for i := range r.stores {
 			s := &r.stores[i]
-			s.rise[stage] = (r.over(&s.edge) - s.start) / gamma
+			s.end = r.over(&s.edge)
+			s.rise[stage] = (s.end - s.start) * (1 / gamma)
 		}
-		if stage == 0 {
-			r.eachFlow(func(f *flow, _ float64) { f.passed = 0 })
-		}
-		r.eachFlow(func(f *flow, current float64) { f.passed += share[stage] * current })
+		r.flows(share[stage], stage)
 	}
-	floor := max(p.floor, 1e-3*r.highest())
+	floor := max(p.floor, 1e-3*r.most)
 	for i := range r.stores {
 		s := &r.stores[i]
-		wrong := gamma * (s.rise[0] - 2*s.rise[1] + s.rise[2])
-		strain = max(strain, math.Abs(wrong)/(p.tolerance*(math.Abs(r.over(&s.edge))+floor)))
+		wrong := math.Abs(s.rise[0] - 2*s.rise[1] + s.rise[2])
+		if bound := p.tolerance / gamma * (math.Abs(s.end) + floor); wrong > strain*bound {
+			strain = wrong / bound
+		}
 	}
 	return strain
 }
 
-// begin is where a capacitor starts a stage from.
-func (s *store) begin(weights *[stages]float64, stage int) {
-	s.start = s.u
-	for j := range stage {
-		s.start += weights[j] * s.rise[j]
+// begin is where the capacitors start a stage from, and what they feed in then.
+func (r *rundown) begin(stage int) {
+	w := &weights[stage]
+	copy(r.still.current, r.always.current)
+	for i := range r.stores {
+		s := &r.stores[i]
+		switch s.start = s.u; stage {
+		case 1:
+			s.start += w[0] * s.rise[0]
+		case 2:
+			s.start += w[0]*s.rise[0] + w[1]*s.rise[1]
+		}
+		if s.slot != noSlot {
+			i := s.g * (s.start - s.offset)
+			r.still.current[s.from] += i
+			r.still.current[s.to] -= i
+		}
 	}
 }
 
@@ -127,38 +137,53 @@ func (s *store) begin(weights *[stages]float64, stage int) {
 func (r *rundown) accept(h float64) {
 	r.work.Steps++
 	for i := range r.stores {
-		r.stores[i].u = r.over(&r.stores[i].edge)
+		r.stores[i].u = r.stores[i].end
 	}
-	r.eachFlow(func(f *flow, _ float64) { f.charge += h * f.passed })
+	r.most = r.highest()
+	r.passed(h)
 }
 
-// eachFlow visits what charge can flow through, with the present current.
-func (r *rundown) eachFlow(visit func(f *flow, current float64)) {
+// flows adds the present currents to those of the step with the weight of a stage.
+func (r *rundown) flows(weight float64, stage int) {
 	for i := range r.wires {
 		w := &r.wires[i]
-		visit(&w.flow, w.g*r.over(&w.edge))
+		w.add(weight*w.g*r.over(&w.edge), stage)
 	}
 	for i := range r.valves {
 		v := &r.valves[i]
 		current := 0.0
 		if v.on {
-			current = r.gOn * r.over(&v.edge)
+			current = weight * r.gOn * r.over(&v.edge)
 		}
-		visit(&v.flow, current)
+		v.add(current, stage)
+	}
+}
+
+func (f *flow) add(current float64, stage int) {
+	if stage == 0 {
+		f.passed = 0
+	}
+	f.passed += current
+}
+
+// passed counts the charge of a step.
+func (r *rundown) passed(h float64) {
+	for i := range r.wires {
+		r.wires[i].charge += h * r.wires[i].passed
+	}
+	for i := range r.valves {
+		r.valves[i].charge += h * r.valves[i].passed
 	}
 }
 
 // prepare sets up the conductances of implicit Euler stages of length h.
 func (r *rundown) prepare(h float64) {
 	r.fresh = false
-	r.still.clear()
+	r.still.copy(&r.always)
 	for i := range r.stores {
 		s := &r.stores[i]
 		s.g = s.c / h
 		r.still.lay(&s.edge, s.g)
-	}
-	for i := range r.wires {
-		r.still.lay(&r.wires[i].edge, r.wires[i].g)
 	}
 	if r.diode > 0 {
 		r.gOn = 1 / r.diode
@@ -170,13 +195,6 @@ func (r *rundown) prepare(h float64) {
 // settle finds the potentials at the end of a stage from the capacitors' starting
 // voltages, with every diode as its voltage asks.
 func (r *rundown) settle() {
-	clear(r.still.current)
-	for i := range r.stores {
-		r.still.drive(&r.stores[i].edge, r.stores[i].g, r.stores[i].start)
-	}
-	for i := range r.wires {
-		r.still.drive(&r.wires[i].edge, r.wires[i].g, 0)
-	}
 	const tries = 200
 	for try := range tries {
 		r.solve()
@@ -207,22 +225,30 @@ func (f *feed) ideal(valves []valve, was float64) float64 {
 // solve finds the potentials with the diodes as they are; the factors serve as long
 // as neither the step nor a diode changes.
 func (r *rundown) solve() {
-	copy(r.g, r.still.g)
 	copy(r.current, r.still.current)
 	for i := range r.valves {
-		v := &r.valves[i]
-		if v.on && v.slot != noSlot {
-			r.g[v.slot] += r.gOn
+		if v := &r.valves[i]; v.on && v.slot != noSlot && v.offset != 0 {
 			r.current[v.from] -= r.gOn * v.offset
 			r.current[v.to] += r.gOn * v.offset
 		}
 	}
 	if !r.fresh {
-		r.factors.factor(r.g)
-		r.fresh = true
-		r.work.Factorisations++
+		r.factor()
 	}
 	r.factors.solve(r.current, r.v)
+}
+
+// factor removes all nodes with the diodes as they are.
+func (r *rundown) factor() {
+	copy(r.g, r.still.g)
+	for i := range r.valves {
+		if v := &r.valves[i]; v.on && v.slot != noSlot {
+			r.g[v.slot] += r.gOn
+		}
+	}
+	r.factors.factor(r.g)
+	r.fresh = true
+	r.work.Factorisations++
 }
 
 // turn switches the diodes that disagree with their voltage: all at once, and where
@@ -230,11 +256,17 @@ func (r *rundown) solve() {
 // taken, the more is put down to rounding.
 func (r *rundown) turn(try int) (turned bool) {
 	const patience = 20
-	noise := 1e-15 * math.Pow(10, float64(try/patience)) * r.topmost()
+	noise := -1.0 // not known yet
 	for i := range r.valves {
 		v := &r.valves[i]
 		over := r.over(&v.edge)
-		if v.slot == noSlot || v.on && over >= -noise || !v.on && over <= noise {
+		if v.slot == noSlot || v.on == (over >= 0) || !v.on && over <= 0 {
+			continue
+		}
+		if noise < 0 {
+			noise = 1e-15 * math.Pow(10, float64(try/patience)) * r.topmost()
+		}
+		if math.Abs(over) <= noise {
 			continue
 		}
 		v.on, turned = !v.on, true
@@ -248,7 +280,9 @@ func (r *rundown) turn(try int) (turned bool) {
 func (r *rundown) topmost() float64 {
 	most := 0.0
 	for _, v := range r.v {
-		most = max(most, math.Abs(v))
+		if v = math.Abs(v); v > most {
+			most = v
+		}
 	}
 	return most
 }

@@ -4,11 +4,18 @@ import (
 	"math"
 )
 
+// heed sets what may escape the cubic through a sine in a step: twice its largest error.
+func (w *walker) heed(h float64) {
+	x := w.omega * h
+	w.margin = 1e-3 * x * x * x * x * w.scale
+}
+
 // crossing finds the first diode that leaves its state during the trial step and
 // the part of the step at which it does; none is −1.
 func (w *walker) crossing() (diode int, at float64) {
 	diode, at = -1, math.Inf(1)
-	for i := range w.diodes {
+	w.watch()
+	for _, i := range w.near {
 		y := w.beyond(i)
 		if y.farBelow(w.slack[i]) {
 			continue
@@ -25,24 +32,49 @@ func (w *walker) crossing() (diode int, at float64) {
 	return diode, at
 }
 
+// watch lists the diodes that may leave their state during the trial step, or come so
+// near to it that the cubic cannot tell. A cubic through samples leaves their range by
+// less than the range itself.
+func (w *walker) watch() {
+	w.near = w.near[:0]
+	u0, u1, u2, u3 := w.u, w.stage[0], w.stage[1], w.stage[2]
+	s0, s1, s2, s3 := w.sine[0], w.sine[1], w.sine[2], w.sine[3]
+	for i := range w.diodes {
+		d := &w.diodes[i]
+		fixed, swing := d.offset.direct+w.sign*d.offset.square-d.drop, d.offset.sine
+		y0, y1, y2, y3 := fixed+swing*s0, fixed+swing*s1, fixed+swing*s2, fixed+swing*s3
+		if k := d.a; k >= 0 {
+			y0, y1, y2, y3 = y0+u0[k], y1+u1[k], y2+u2[k], y3+u3[k]
+		}
+		if k := d.b; k >= 0 {
+			y0, y1, y2, y3 = y0-u0[k], y1-u1[k], y2-u2[k], y3-u3[k]
+		}
+		low, high := min(y0, y1, y2, y3), max(y0, y1, y2, y3)
+		if w.on[i] {
+			low, high = -high, -low
+		}
+		if high+(high-low) >= -w.margin {
+			w.near = append(w.near, i)
+		}
+	}
+}
+
 // doubtful finds the first place within the trial step at which a diode comes so
 // near to leaving its state that the cubic cannot tell whether it does; one where
 // there is none. A step to there can.
-func (w *walker) doubtful(h float64) float64 {
+func (w *walker) doubtful() float64 {
 	at := 1.0
-	x := w.omega * h
-	margin := 1e-3 * x * x * x * x * w.scale // of the cubic through a sine, twice its largest error
-	for i := range w.diodes {
+	for _, i := range w.near {
 		if w.on[i] {
 			continue
 		}
 		y := w.beyond(i)
-		if y.farBelow(-margin) {
+		p := through(y[0], y[1], y[2], y[3])
+		if p.monotonic() {
 			continue
 		}
-		p := through(y[0], y[1], y[2], y[3])
 		for _, t := range p.turns() {
-			if t > 1e-3 && t < math.Min(at, 0.999) && p.at(t) > -margin {
+			if t > 1e-3 && t < math.Min(at, 0.999) && p.at(t) > -w.margin {
 				at = t
 			}
 		}
@@ -120,9 +152,10 @@ func (p *cubic) between(low, high, target float64) float64 {
 // just does so at its end; it returns the length and the diode, −1 where none does.
 // A diode that does so at once is returned with the shortest step.
 func (w *walker) locate(h float64) (float64, int) {
+	w.heed(h)
 	target, at := w.crossing()
 	if target < 0 {
-		if at = w.doubtful(h); at < 1 {
+		if at = w.doubtful(); at < 1 {
 			h *= at
 			w.try(h)
 			target, at = w.crossing()

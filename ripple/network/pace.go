@@ -153,11 +153,11 @@ func (p *pace) strain(h float64) float64 {
 	if p.passed == 0 {
 		return strain
 	}
-	limit := p.charge * p.passed / h
+	limit, swing := p.charge*p.passed/h, p.sine[0]-back(p.sine[1], p.sine[2], p.sine[3])
 	for i := range p.diodes {
 		if d := &p.diodes[i]; p.on[i] {
 			bend := d.difference(p.u) - back(d.difference(p.stage[0]), d.difference(p.stage[1]), d.difference(p.stage[2]))
-			bend += d.offset.sine * (p.sine[0] - back(p.sine[1], p.sine[2], p.sine[3]))
+			bend += d.offset.sine * swing
 			strain = math.Max(strain, math.Abs(bend)*d.on/limit)
 		}
 	}

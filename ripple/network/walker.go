@@ -32,6 +32,8 @@ type walker struct {
 	poleR   float64    // and at the real one
 	smooth  bool       // events are located as well as the arithmetic allows
 	slack   []float64  // by diode: the excess that does not count
+	near    []int      // diodes that the trial step may switch
+	margin  float64    // by which they may escape the cubic
 	care    float64    // the part of the mean current that it makes
 	work    Work
 }
@@ -209,15 +211,23 @@ func (w *walker) accept(h float64) {
 // size of that. The energy the method loses is this squared (algebraic stability).
 func (w *walker) roughness() float64 {
 	sum := 0.0
-	u1, u2, u3 := w.stage[0], w.stage[1], w.stage[2]
+	u0, u1, u2, u3 := w.u, w.stage[0], w.stage[1], w.stage[2]
+	swing := w.sine[0] - back(w.sine[1], w.sine[2], w.sine[3])
 	for i := range w.capacitors {
 		c := &w.capacitors[i]
 		if c.a == c.b {
 			continue
 		}
-		d := c.difference(w.u) - back(c.difference(u1), c.difference(u2), c.difference(u3))
-		d += c.offset.sine * (w.sine[0] - back(w.sine[1], w.sine[2], w.sine[3]))
-		sum += math.Min(c.value, w.typical) * d * d
+		var d0, d1, d2, d3 float64
+		if k := c.a; k >= 0 {
+			d0, d1, d2, d3 = u0[k], u1[k], u2[k], u3[k]
+		}
+		if k := c.b; k >= 0 {
+			d0, d1, d2, d3 = d0-u0[k], d1-u1[k], d2-u2[k], d3-u3[k]
+		}
+		d := d0 - back(d1, d2, d3)
+		d += c.offset.sine * swing
+		sum += min(c.value, w.typical) * d * d
 	}
 	for i := range w.inductors {
 		d := w.amps[i] - back(w.branch[0][i], w.branch[1][i], w.branch[2][i])

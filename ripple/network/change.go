@@ -66,6 +66,7 @@ func (c *change) begin(from, to *Periodic) error {
 		return err
 	}
 	h := newShooter(s)
+	h.pace.care = coarse
 	h.guess(0)
 	passed := math.Max(h.pace.passed, 0.1*s.typical*s.scale)
 	h.take(to.State(0))

@@ -41,6 +41,11 @@ const (
 	detour    = 0.3
 )
 
+// coarse is the part of a diode's mean current that may flow or fail to flow before its
+// switching is located, where a period need not come back to its start: it does so for a
+// moment only, so the charge it makes is a far smaller part.
+const coarse = 0.05
+
 // here walks the period at the present state.
 func (e *envelope) here(g grade) error {
 	e.pace.bounds, e.pace.track = g.bounds(), e.linear

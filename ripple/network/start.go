@@ -104,6 +104,7 @@ func (r *rise) stair(part float64) (*envelope, error) {
 		return nil, err
 	}
 	h := newShooter(s)
+	h.pace.care = coarse
 	h.guess(0)
 	passed := math.Max(h.pace.passed, 0.1*s.typical*s.scale)
 	if r.x != nil {

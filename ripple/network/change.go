@@ -47,16 +47,17 @@ func Change(from, to *Periodic, o ChangeOptions) (*Changed, error) {
 		return nil, err
 	}
 	err = c.follow()
-	c.out.Work = c.envelope.pace.work
+	c.out.Work = c.glide.pace.work
+	c.out.Work.Products = c.glide.work.Products
 	return &c.out, err
 }
 
 // change is a change under way.
 type change struct {
-	options  ChangeOptions
-	envelope *envelope
-	way      span
-	out      Changed
+	options ChangeOptions
+	glide   *glide
+	way     span
+	out     Changed
 }
 
 // begin puts the state of one circuit into the other.
@@ -73,9 +74,8 @@ func (c *change) begin(from, to *Periodic) error {
 	goal := append([]float64(nil), h.x...)
 	h.take(from.State(0))
 	h.judge(passed)
-	c.envelope = newEnvelope(h)
 	axpy(-1, h.x, goal)
-	c.envelope.way = norm(goal)
+	c.glide = newGlide(h, norm(goal))
 	c.way, err = to.span(c.options.Node, circuit.Ground)
 	return err
 }
@@ -95,7 +95,7 @@ func (h *shooter) take(from State) {
 
 // gone is the share of the way that the mean of the period walked last has gone.
 func (c *change) gone() float64 {
-	t := c.envelope.linear
+	t := c.glide.linear
 	mean := 0.0
 	for k := range t.steps {
 		y := t.stages(k, &c.way)
@@ -109,30 +109,24 @@ func (c *change) gone() float64 {
 // follow goes on until the node has gone the share of the way. Where a leap went past it,
 // it goes back and takes shorter ones.
 func (c *change) follow() error {
-	e := c.envelope
-	before, at, beyond := append([]float64(nil), e.x...), 0.0, math.Inf(1)
+	e, at := c.glide, foothold{beyond: math.Inf(1)}
 	for range 400 {
-		if err := e.here(fine); err != nil {
+		if err := e.here(); err != nil {
 			return err
 		}
 		e.judge(math.Max(e.pace.passed, e.linear.passed()))
-		if c.gone() >= float64(c.options.Share) {
-			if e.periods-at <= 1 {
-				c.out.Settled = quantity.Time((e.periods + 1) * e.period)
-				return nil
-			}
-			beyond = e.periods
-			copy(e.x, before)
-			e.periods = at
-			if err := e.here(fine); err != nil {
-				return err
-			}
+		gone := c.gone()
+		switch past := gone >= float64(c.options.Share); {
+		case past && e.periods-at.periods <= 1:
+			c.out.Settled = quantity.Time((e.periods + 1) * e.period)
+			return nil
+		case past:
+			at.beyond, at.above = e.periods, gone
+			e.back()
+		default:
+			at.periods, at.below = e.periods, gone
 		}
-		copy(before, e.x)
-		at = e.periods
-		if err := e.advance(math.Max(1, math.Floor((beyond-at)/2))); err != nil {
-			return err
-		}
+		e.advance(at.reach(math.Inf(1), float64(c.options.Share)))
 	}
 	return lack.Failed("the change took more than 400 leaps")
 }

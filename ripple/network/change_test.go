@@ -21,10 +21,10 @@ func TestChangeWithTheTimeConstantOfAFilter(t *testing.T) {
 	}
 	near(t, "before", float64(c.Before), 1900, 1e-2)
 	near(t, "after", float64(c.After), 2000, 1e-2)
-	if want := 1e-3 * math.Log(20); math.Abs(float64(c.Settled)/want-1) > 0.03 {
+	if want := 1e-3 * math.Log(20); math.Abs(float64(c.Settled)/want-1) > 0.01 {
 		t.Errorf("settled after %g s, want %g s", float64(c.Settled), want)
 	}
-	if c.Work.Periods > 120 {
+	if c.Work.Periods > 40 {
 		t.Errorf("%d periods walked", c.Work.Periods)
 	}
 	if _, err := Change(free, free, ChangeOptions{Node: out}); err == nil {

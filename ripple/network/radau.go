@@ -64,11 +64,11 @@ type cubic [4]float64
 // through is the cubic through the start and the three stages of a step: the
 // collocation polynomial.
 func through(y0, y1, y2, y3 float64) cubic {
-	d01 := (y1 - y0) * (1 / node1)
-	d12 := (y2 - y1) * (1 / (node2 - node1))
-	d23 := (y3 - y2) * (1 / (1 - node2))
-	d012 := (d12 - d01) * (1 / node2)
-	d123 := (d23 - d12) * (1 / (1 - node1))
+	d01 := (y1 - y0) / node1
+	d12 := (y2 - y1) / (node2 - node1)
+	d23 := (y3 - y2) / (1 - node2)
+	d012 := (d12 - d01) / node2
+	d123 := (d23 - d12) / (1 - node1)
 	c := d123 - d012
 	return cubic{y0, d01 - node1*d012 + node1*node2*c, d012 - (node1+node2)*c, c}
 }

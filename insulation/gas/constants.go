@@ -102,7 +102,6 @@ var constants = map[gap.Gas][]sparking{
 		perTorr(14.67, 180, 0.12, 100, 600, "Townsend constants of argon, Nasser 1971", gap.Read),
 		noble(29.2, 26.6, math.Log1p(1/0.12), 10, 700, "Ward's constants of argon, 29.2 and 26.6, Raizer, Gas Discharge Physics"),
 	},
-	gap.CarbonDioxide: {perTorr(20, 466, 0.01, 500, 1000, "Townsend constants of carbon dioxide, von Engel", gap.Memory)},
 }
 
 // lowestLaw is the lowest voltage among the constants that hold; left of its own
@@ -129,11 +128,8 @@ func beyond(g gap.Gas, pd quantity.PressureLength) error {
 	for _, c := range constants[g] {
 		end = max(end, c.Farthest())
 	}
-	switch g {
-	case gap.Nitrogen:
+	if g == gap.Nitrogen {
 		return lack.Range("figures of nitrogen reach to 5 cm at normal density, asked for %s of pressure times gap", asked)
-	case gap.CarbonDioxide:
-		return lack.Range("the only figure of %s is its lowest breakdown voltage, to %s of pressure times gap: its Townsend constants hold for stronger fields only, asked for %s", string(g), quantity.Text(m.At), asked)
 	}
 	return lack.Range("figures of %s reach to %s of pressure times gap, asked for %s", string(g), quantity.Text(end), asked)
 }

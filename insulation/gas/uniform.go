@@ -42,9 +42,9 @@ func uniformLaw(x quantity.Length) quantity.Voltage {
 // Air: the law of uniform fields; under δ d = 0.1 mm Paschen's law, not below the
 // measured minimum. Nitrogen: Paschen's law; from 1 mm to 5 cm at normal density the law
 // of air, which it meets within 1 % at 1 cm. Sulphur hexafluoride: the streamer criterion,
-// under 0.1 mm at normal density a lower bound. The other gases: Paschen's law where its
-// constants hold: hydrogen to some 4400, argon to 340, helium to 36 Torr cm, carbon
-// dioxide nowhere past its minimum. Left of the minimum the longest path breaks down first:
+// under 0.1 mm at normal density a lower bound. Carbon dioxide: past its minimum a lower
+// bound. The other gases: Paschen's law where its constants hold: hydrogen to some 4400,
+// argon to 340, helium to 36 Torr cm. Left of the minimum the longest path breaks down first:
 // the answer is the minimum itself. Gaps under 10 µm and pressures above 1 MPa are a lack.
 func UniformBreakdown(s State, d quantity.Length) (gap.Answer[quantity.Voltage], error) {
 	switch {
@@ -60,6 +60,8 @@ func UniformBreakdown(s State, d quantity.Length) (gap.Answer[quantity.Voltage],
 		return uniformNitrogen(s, d)
 	case gap.SulphurHexafluoride:
 		return uniformSF6(s, d)
+	case gap.CarbonDioxide:
+		return uniformCO2(s, d)
 	}
 	return paschenAnswer(s.Gas, s.reduced(d))
 }

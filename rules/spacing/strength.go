@@ -5,6 +5,7 @@ import (
 	"strings"
 
 	"kilovet/hv/chain"
+	"kilovet/hv/lack"
 	"kilovet/hv/quantity"
 	"kilovet/insulation"
 	"kilovet/rules/evidence"
@@ -137,7 +138,14 @@ func judgeCorona(e *evidence.Evidence, s *chain.Spacing) (rule.Finding, string) 
 	}
 	f.Under = x.Under.Text()
 	f.Sources = append(append(rule.Cited(onset.Sources), coronaSource), shown(onset.Answer)...)
-	f.Because = fmt.Sprintf("%s across a gap where discharge is expected from %s (%s)", quantity.Text(x.Voltages.Peak), quantity.Text(onset.Value), onset.Because)
+	expected := "where discharge is expected from"
+	if onset.AtLeast {
+		expected = "where no discharge is expected under"
+	}
+	f.Because = fmt.Sprintf("%s across a gap %s %s (%s)", quantity.Text(x.Voltages.Peak), expected, quantity.Text(onset.Value), onset.Because)
+	if onset.AtLeast && !quantity.AtMost(x.Voltages.Peak, onset.Value) {
+		return leftOpen(f, s, x, lack.Failed("only a lower bound of the onset is known")), ""
+	}
 	f = f.Most(rule.Of(x.Voltages.Peak), rule.Of(onset.Value), limits.DistanceMargin).Assume(onset.Assumptions...).Assume(beyond(e, s, x)...)
 	if f.Verdict == rule.Fails {
 		f.Verdict = rule.Marginal
@@ -154,7 +162,13 @@ func judgeCorona(e *evidence.Evidence, s *chain.Spacing) (rule.Finding, string) 
 
 // noOnset is the finding where no law gives the onset.
 func noOnset(f rule.Finding, s *chain.Spacing, x evidence.Spacing) rule.Finding {
-	f = f.Lacking(x.Assessment.Onset.Lack)
+	return leftOpen(f, s, x, x.Assessment.Onset.Lack)
+}
+
+// leftOpen is the finding where it is not known whether a discharge begins, and what would
+// tell.
+func leftOpen(f rule.Finding, s *chain.Spacing, x evidence.Spacing, why *lack.Lack) rule.Finding {
+	f = f.Lacking(why)
 	if len(f.Missing) == 0 && !x.Computed && s.Clearance.Set() {
 		f.Remedy = measured(s, "at which voltage a discharge begins in this gap", "keep the peak under it")
 	}

@@ -88,7 +88,7 @@ func onset(g gap.Gap, s gas.State, l shape.Line) (gap.Answer[quantity.Voltage], 
 	if err != nil {
 		return a, err
 	}
-	if peek, err := gas.PeekOnset(s, g.Shape.Kind, l); err == nil {
+	if peek, err := gas.PeekOnset(s, g.Shape.Kind, l, g.Surface); err == nil {
 		a.Shown = append(a.Shown, peek...)
 	}
 	a.Shown = append(a.Shown, measuringGap(g, s)...)

@@ -69,3 +69,35 @@ func TestStreamerAgainstPeek(t *testing.T) {
 		near(t, what+", other coefficient", float64(l.Peak(q))/1e5, c.other, 5e-3)
 	}
 }
+
+// Peek's laws hold where the gap is wider than the layer 0.3 √r cm that a discharge needs (F. W.
+// Peek, memory): a wire of 3 mm in a tube of 63 mm at 25 °C, 31 (1 + 0.308/√0.3) kV/cm or 44.24
+// kV, and 0.93 of it where weathered (Peek's irregularity factor). Cylinders of 50 and 51 mm are
+// plates: 4.3 kV by the law of uniform fields, 3.5 by Peek's, which then does not apply; nor does
+// it in another gas.
+func TestPeekWhereItApplies(t *testing.T) {
+	s := gas.State{Gas: gap.AirGas, Pressure: 101325, Temperature: 298.15}
+	wire := line(t, gap.Coaxial, 3e-3, 60e-3)
+	for surface, factor := range map[gap.Surface]float64{"": 1, gap.Smooth: 1, gap.Weathered: 0.93, gap.Stranded: 0.83} {
+		all, err := gas.PeekOnset(s, gap.Coaxial, wire, surface)
+		if err != nil || len(all) != 3 {
+			t.Fatalf("%q: %d laws (%v)", surface, len(all), err)
+		}
+		near(t, string(surface), float64(all[0].Value), factor*44.24e3, 2e-4)
+	}
+	if _, err := gas.PeekOnset(s, gap.Coaxial, wire, "gilded"); lack.Of(err) == nil {
+		t.Error("an unknown surface is answered")
+	}
+	for kind, r := range map[gap.Kind]quantity.Length{gap.Coaxial: 50e-3, gap.CylinderPlane: 50e-3, gap.ParallelCylinders: 50e-3, gap.RoundedEdge: 50e-3, gap.SpherePlane: 50e-3, gap.ConcentricSpheres: 50e-3} {
+		if all, err := gas.PeekOnset(s, kind, line(t, kind, r, 1e-3), gap.Smooth); lack.Of(err) == nil {
+			t.Errorf("%s 1 mm apart: %v", kind, all)
+		}
+		if _, err := gas.PeekOnset(s, kind, line(t, kind, r, 20e-3), gap.Smooth); err != nil {
+			t.Errorf("%s 20 mm apart: %v", kind, err)
+		}
+	}
+	s.Gas = gap.Nitrogen
+	if _, err := gas.PeekOnset(s, gap.Coaxial, wire, gap.Smooth); lack.Of(err) == nil {
+		t.Error("nitrogen has a law of Peek")
+	}
+}

@@ -78,7 +78,7 @@ func cleanSurface(g gap.Gap, v gap.Voltages, least gap.Result[quantity.Length]) 
 		return gap.Answer[quantity.Length]{}, err
 	}
 	a := stepped(g, v.LongTerm, "any material in dry and clean air", r)
-	a.Sources = append(a.Sources, gap.Source{Text: "IEC 60664-3, under a coating of type 1 pollution degree 1", Mark: gap.Memory})
+	a.Sources = append(a.Sources, coverSource)
 	a.Assumptions = []string{map[gap.Medium]string{
 		gap.Oil: "a surface in clean dry oil without fibres", gap.Solid: "a joint of solids that is bonded or filled without voids",
 	}[g.Medium] + " is no worse than a dry and clean one in air"}

@@ -2,6 +2,7 @@ package insulation
 
 import (
 	"fmt"
+	"slices"
 
 	"kilovet/hv/quantity"
 	"kilovet/insulation/gap"
@@ -62,7 +63,11 @@ func tracked(g gap.Gap, v gap.Voltages, group table.Group) (gap.Answer[quantity.
 	if err != nil {
 		return gap.Answer[quantity.Length]{}, err
 	}
-	return withRibs(g, v, on, stepped(g, v.LongTerm, group.String(), r)), nil
+	a := stepped(g, v.LongTerm, group.String(), r)
+	if Covered(g) {
+		a.Sources = append(a.Sources, coverSource)
+	}
+	return withRibs(g, v, on, a), nil
 }
 
 // stepped is a reading of Table F.5 of some material as an answer, twice it for reinforced
@@ -102,17 +107,23 @@ func groupOf(g gap.Gap) (table.Group, gap.Source, error) {
 	return table.GroupByName(g.Material)
 }
 
-// degreeOn is the pollution degree at the surface: 1 under a coating or inside a board
-// (IEC 60664-3, type 1 protection, memory), else that of the site.
+// degreeOn is the pollution degree at the surface: 1 where the board is covered, else that
+// of the site.
 func degreeOn(g gap.Gap) int {
-	if g.Medium != gap.PrintedBoard || g.PollutionDegree == 0 {
-		return g.PollutionDegree
-	}
-	switch g.Board {
-	case gap.Internal, gap.PolymerCoated, gap.ConformalCoated, gap.TerminationCoat:
+	if Covered(g) {
 		return 1
 	}
 	return g.PollutionDegree
+}
+
+var coverSource = gap.Source{Text: "IEC 60664-3, under protection of type 1 pollution degree 1", Mark: gap.Memory}
+
+// Covered reports whether pollution degree 1 is taken in place of a worse one of the site:
+// under a coating or inside a board (IEC 60664-3, protection of type 1, memory). That the
+// coating is of that type is for the rules to say.
+func Covered(g gap.Gap) bool {
+	return g.Medium == gap.PrintedBoard && !g.Exposed && g.PollutionDegree > 1 &&
+		slices.Contains([]gap.Board{gap.Internal, gap.PolymerCoated, gap.ConformalCoated, gap.TerminationCoat}, g.Board)
 }
 
 // GrooveWidth is the width X under which a groove in the surface counts as bridged and

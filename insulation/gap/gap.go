@@ -15,6 +15,7 @@ type Gap struct {
 	Material string            // of the surface or the solid
 	CTI      *quantity.Voltage // comparative tracking index, in place of a material
 	Board    Board             // printed boards only
+	Exposed  bool              // printed boards: no coating keeps the pollution of the site away
 
 	PollutionDegree int // 1 to 4, IEC 60664-1
 	Altitude        *quantity.Length

@@ -133,8 +133,10 @@ func againstBreakdown(e *evidence.Evidence, s *chain.Spacing, x evidence.Spacing
 	switch across := againstBoth(e, s, x); {
 	case along != "" && across != "":
 		size = along + " and " + across
-	case along != "" || across != "":
-		size = along + across
+	case along != "":
+		size = along + gapShort(s, x)
+	case across != "":
+		size = across + surfaceShort(s, x)
 	case x.HasWork() && s.Clearance.Set() && x.Gap.Shape != nil:
 		size = conflict(s, x)
 	case !x.HasWork():

@@ -93,7 +93,7 @@ func judged(e *evidence.Evidence, f family, r rule.Rule) rule.Judgement {
 		return rule.Over(omitted)
 	}
 	j := r.Judge(e)
-	j.Findings = onSupply(j.Findings, unsaid(e.Chain()))
+	j.Findings = onSupply(j.Findings, func() []string { return append(unsaid(e.Chain()), e.Ringing()...) })
 	return j
 }
 

@@ -1,6 +1,8 @@
 package rules
 
 import (
+	"slices"
+
 	"kilovet/hv/chain"
 	"kilovet/rules/rule"
 )
@@ -22,12 +24,16 @@ func unsaid(c *chain.Chain) (all []string) {
 
 // onSupply adds what is taken for granted about the supply to each finding that rests on a
 // state of the chain.
-func onSupply(findings []rule.Finding, taken []string) []rule.Finding {
+func onSupply(findings []rule.Finding, granted func() []string) []rule.Finding {
+	if !slices.ContainsFunc(findings, rests) {
+		return findings
+	}
+	taken := granted()
 	if len(taken) == 0 {
 		return findings
 	}
 	for i, f := range findings {
-		if f.Under == "" {
+		if !rests(f) {
 			continue
 		}
 		passed := f.Verdict == rule.Meets
@@ -38,3 +44,6 @@ func onSupply(findings []rule.Finding, taken []string) []rule.Finding {
 	}
 	return findings
 }
+
+// rests reports whether a finding rests on a state of the chain.
+func rests(f rule.Finding) bool { return f.Under != "" }

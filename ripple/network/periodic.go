@@ -15,6 +15,9 @@ type Periodic struct {
 	// solution and one on a mesh about half as fine, so a bound of the error with a
 	// wide margin.
 	Uncertainty quantity.Voltage
+	// Adrift is the part of the voltages by which charges that only leakage ties down may be
+	// off, where a circuit rings so that no walk over a period comes back more exactly.
+	Adrift quantity.Fraction
 	// Assumptions are what was assumed beyond the description, in plain words.
 	Assumptions []string
 

@@ -10,7 +10,7 @@ type search struct {
 	recall    recall
 	level     *level  // the voltage to be held; nil where the drive is given
 	sound     spot    // the last state that was not a step back
-	most      int     // steps that all attempts together may take
+	most      int     // steps that all attempts together may take; zero is about two budgets
 	patience  int     // leaps it may take
 	last      float64 // change over the period at the state corrected last
 	trial     bool    // the last correction has yet to prove itself
@@ -18,6 +18,7 @@ type search struct {
 	leaps     int     // taken
 	amplified float64 // largest correction so far over the change over the period it answers
 	stray     bool    // Newton's method led astray: leap next
+	stillest  stillest
 	rousing
 }
 
@@ -30,9 +31,7 @@ const (
 func newSearch(s *shooter) *search {
 	e := newEnvelope(s)
 	e.hurried = true
-	h := &search{envelope: e}
-	h.most = 20000 + h.budget()
-	return h
+	return &search{envelope: e}
 }
 
 // approach corrects the state in one grade until a correction is a small part of it.
@@ -58,12 +57,19 @@ func (s *search) converge(g grade) error {
 		stalled := size > 0.3*last
 		last = size
 		small := s.small()
-		if stalled { // what is left is rounding, which a mode that only leakage ties down makes much of
+		switch { // what is left is rounding, which a mode that only leakage ties down makes much of
+		case stalled && size <= worthless*norm(s.x):
+			small = 1e-3
+		case stalled:
 			small = 1e-5
 		}
+		s.keepStillest(g, size)
 		return norm(s.step) <= small*norm(s.x) && s.balanced(stalled)
 	})
 }
+
+// worthless is the change over a period, in parts of the state, that is rounding alone.
+const worthless = 1e-12
 
 // small is the correction, in parts of the state, that ends a search.
 func (s *search) small() float64 {
@@ -76,9 +82,10 @@ func (s *search) small() float64 {
 // until walks and corrects until told that it is done.
 func (s *search) until(g grade, done func() bool) error {
 	s.pace.smooth, s.stray, s.last, s.leap, s.trial, s.still, s.leaps = false, false, math.Inf(1), 1, false, 0, 0
+	s.stillest.times = 0
 	walked, stepped := s.pace.work.Periods, s.pace.work.Steps
 	for range mostCorrections {
-		if s.pace.work.Periods-walked > mostWalks || s.pace.work.Steps-stepped > s.budget() || s.spent() {
+		if s.rings() || s.pace.work.Periods-walked > mostWalks || s.pace.work.Steps-stepped > s.budget() || s.spent() {
 			break
 		}
 		finished, err := s.once(g, done)
@@ -89,12 +96,27 @@ func (s *search) until(g grade, done func() bool) error {
 	return s.unreached()
 }
 
-// budget is the number of steps after which a search is given up: ten times what
-// any ordinary ladder takes.
-func (s *search) budget() int { return 20000 + 500*len(s.diodes) }
+// budget is the number of steps after which a search is given up: ten times what any
+// ordinary ladder takes, and where a period rings in a thousand steps as many of such
+// periods as settle it, but for a swift search.
+func (s *search) budget() int {
+	n := 20000 + 500*len(s.diodes)
+	if s.swift {
+		return n
+	}
+	return n + ringingPeriods*max(0, s.longest-40*len(s.diodes))
+}
+
+// ringingPeriods is the number of periods that a circuit that rings is walked for.
+const ringingPeriods = 100
 
 // spent reports whether all attempts together have had their steps: about two searches.
-func (s *search) spent() bool { return s.pace.work.Steps > s.most }
+func (s *search) spent() bool {
+	if s.most > 0 {
+		return s.pace.work.Steps > s.most
+	}
+	return s.pace.work.Steps > 20000+s.budget()
+}
 
 // exacting is the part of what the diodes pass below which corrections of the
 // charges ask for events to be located as well as the arithmetic allows.

@@ -90,8 +90,13 @@ func (s *search) solve(from *Periodic) (*Periodic, error) {
 	if err == nil {
 		return p, nil
 	}
-	s.pace.care = careful
-	return s.search(from)
+	if !s.rings() {
+		s.pace.care = careful
+		if p, err = s.search(from); err == nil {
+			return p, nil
+		}
+	}
+	return s.atStillest(err)
 }
 
 // search searches from the state of a similar circuit where there is one, as long as
@@ -196,7 +201,7 @@ func (s *search) settleFine(from *spot) error {
 		return nil
 	}
 	s.goBack(from)
-	if s.level != nil {
+	if s.level != nil || s.rings() {
 		return s.unreached()
 	}
 	if err := s.creep(fine, 1e-7); err != nil {

@@ -244,6 +244,19 @@ func (e *Evidence) InputPower() (quantity.Power, error) {
 	return s.InputPower(), nil
 }
 
+// Ringing says of each state of the chain that is not walked to rest how exactly it is known.
+func (e *Evidence) Ringing() (all []string) {
+	if !e.HasSupply() {
+		return nil
+	}
+	for _, state := range States {
+		if s, err := e.Under(Condition{State: state}).solution(); err == nil && s.Adrift > 0 {
+			all = append(all, string(state)+": "+s.Ringing())
+		}
+	}
+	return all
+}
+
 // StateAssumptions are what the steady state takes for granted.
 func (e *Evidence) StateAssumptions() []string {
 	var all []string

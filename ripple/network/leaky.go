@@ -29,6 +29,7 @@ const (
 type reacher struct {
 	failed string // part that leaks what it leaks
 	dead   bool   // nothing feeds the loads: parts of the ladder are cut off
+	taxing bool   // the sound circuit was
 	spent  Work
 }
 
@@ -36,11 +37,18 @@ type reacher struct {
 // several times what an ordinary one takes, more.
 func (r *reacher) allowance(c *circuit.Circuit) int { return 20000 + 200*len(c.Elements) }
 
+// taxingShare is the part of the allowance that one search may take where the sound circuit was
+// taxing, as the number of such parts: few faults of it are reached, and none by taking longer.
+const taxingShare = 3
+
 // steady is the steady state within what is left of the allowance.
 func (r *reacher) steady(c *circuit.Circuit, o Options) (*Periodic, error) {
 	o.Most = r.allowance(c) - r.spent.Steps
 	if o.Most <= 0 {
 		return nil, lack.Failed("the periodic state was not reached because %d periods, with ever less leakage lent to the diodes, are all that a fault is allowed", r.spent.Periods)
+	}
+	if r.taxing {
+		o.Most = min(o.Most, r.allowance(c)/taxingShare)
 	}
 	o.work = &r.spent
 	return Steady(c, o)
@@ -52,18 +60,26 @@ func (r *reacher) reach(c *circuit.Circuit, o Options) (*Periodic, error) {
 	bare := Options{Frequency: o.Frequency}
 	if !r.dead {
 		p, err := r.steady(c, o)
-		if err != nil && o.From != nil {
+		if err != nil && o.From != nil && !r.taxing {
 			p, err = r.steady(c, bare)
 		}
 		if err == nil {
 			return p, nil
 		}
 	}
-	r.spent = Work{} // as much again
+	if !r.taxing {
+		r.spent = Work{} // as much again
+	}
 	if p := r.lend(c, bare); p != nil {
 		return p, nil
 	}
 	return r.steady(c, bare)
+}
+
+// taxed reports whether a state took more than a fault is allowed, or was never reached
+// as exactly as others are: a supply that rings.
+func (r *reacher) taxed(p *Periodic) bool {
+	return p != nil && (p.Adrift > 0 || p.Work.Steps > r.allowance(p.Circuit))
 }
 
 // lend finds the state with leakage lent to the diodes, where two amounts of it give the

@@ -104,7 +104,7 @@ func (s *search) budget() int {
 	if s.swift {
 		return n
 	}
-	return n + ringingPeriods*max(0, s.longest-40*len(s.diodes))
+	return n + ringingPeriods*s.pace.work.ringing(len(s.diodes))
 }
 
 // ringingPeriods is the number of periods that a circuit that rings is walked for.

@@ -33,6 +33,7 @@ func Settle(c *circuit.Circuit, failed Failed, o Options) (Settled, error) {
 	var s Settled
 	c, s.Ended = fed(c)
 	r := reacher{failed: failed.Part, dead: failed.Ladder && len(s.Ended) > 0}
+	r.taxing = r.taxed(o.From)
 	for range mostSettling {
 		p, err := r.reach(c, o)
 		if err != nil {

@@ -25,7 +25,6 @@ type shooter struct {
 	on              []bool
 	pressed         float64 // how hard the diodes are pressed in the guess
 	swift           bool    // no more than limits and ratings ask for
-	longest         int     // steps of the period that took most
 	work            Work
 }
 
@@ -93,8 +92,8 @@ func (s *shooter) walk() error {
 	if err := p.walk(); err != nil {
 		return err
 	}
+	p.work.Longest = max(p.work.Longest, len(p.track.steps))
 	copy(s.on, p.on)
-	s.longest = max(s.longest, len(p.track.steps))
 	s.pack(p.q, p.walker.amps, s.root, s.r)
 	axpy(-1, s.x, s.r)
 	if !finite(s.r) {

@@ -16,7 +16,7 @@ func energyTables(e *evidence.Evidence) []exhibit.Table {
 	if at == nil {
 		return nil
 	}
-	return gather(at, nodeEnergy, openedAtNodes, openedTable, comebackAtNodes, comebackTable, limitTable, rodTable, bodyTable, openedEach)
+	return gather(at, nodeEnergy, unless("faults", openedAtNodes), unless("faults", openedTable), comebackAtNodes, comebackTable, limitTable, rodTable, bodyTable, unless("faults", openedEach))
 }
 
 func under(e *evidence.Evidence) string { return "state: " + e.Condition().Text() + ". " }

@@ -62,7 +62,7 @@ func stored(c *collector, e *evidence.Evidence) {
 			add(c, "stored.discharge_time", node, basis, d.Time, err)
 		}
 	}
-	if c.state == evidence.Lost {
+	if c.state == evidence.Lost && !e.Leaves("faults") {
 		left(c, e)
 	}
 	if d, err := e.SlowestDischarge(); !d.Never {

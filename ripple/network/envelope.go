@@ -31,7 +31,7 @@ type envelope struct {
 func newEnvelope(s *shooter) *envelope {
 	m := len(s.x)
 	return &envelope{shooter: s, leap: 1, from: make([]float64, m), start: make([]float64, m),
-		k1: make([]float64, m), k2: make([]float64, m), linear: s.pace.track, spare: (&track{system: s.system}).reserve()}
+		k1: make([]float64, m), k2: make([]float64, m), linear: s.pace.track, spare: &track{system: s.system}}
 }
 
 // What a leap may be wrong by: a part of the state where time matters, a part of

@@ -89,7 +89,7 @@ func (c *Circuit) Reverse(name string) *Circuit {
 }
 
 func (c *Circuit) rebuild() *builder {
-	b := &builder{elements: slices.Clone(c.Elements), names: slices.Clone(c.names), links: slices.Clone(c.links), seen: map[string]bool{}, negative: c.Negative}
+	b := &builder{elements: slices.Clone(c.Elements), names: slices.Clone(c.names), links: slices.Clone(c.links), seen: make(map[string]bool, len(c.names)), negative: c.Negative}
 	for _, n := range c.names {
 		b.seen[n] = true
 	}

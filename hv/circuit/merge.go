@@ -10,7 +10,8 @@ type builder struct {
 }
 
 func newBuilder() *builder {
-	b := &builder{seen: map[string]bool{}}
+	const usual = 64 // elements and names of a chain, nearly
+	b := &builder{seen: make(map[string]bool, usual), names: make([]string, 0, usual), elements: make([]Element, 0, usual)}
 	b.name("ground")
 	return b
 }
@@ -36,9 +37,10 @@ func (b *builder) link(name, from, to string) {
 	b.links = append(b.links, link{name, from, to})
 }
 
-// circuit numbers the nodes: names joined by links share one, ground is node 0.
+// circuit numbers the nodes: names joined by links share one, ground is node 0. It takes
+// the elements over: nothing is built on afterwards.
 func (b *builder) circuit() *Circuit {
-	c := &Circuit{Negative: b.negative, names: b.names, nodes: map[string]Node{}, links: b.links}
+	c := &Circuit{Negative: b.negative, names: b.names, nodes: make(map[string]Node, len(b.names)), links: b.links}
 	root := joined(b.links)
 	for _, name := range b.names {
 		r := root(name)
@@ -51,10 +53,10 @@ func (b *builder) circuit() *Circuit {
 		c.nodes[name] = n
 		c.labels[n] = append(c.labels[n], name)
 	}
-	c.Elements = make([]Element, 0, len(b.elements))
-	for _, e := range b.elements {
+	c.Elements = b.elements
+	for i := range c.Elements {
+		e := &c.Elements[i]
 		e.From, e.To = c.nodes[e.from], c.nodes[e.to]
-		c.Elements = append(c.Elements, e)
 	}
 	return c
 }

@@ -69,6 +69,7 @@ type system struct {
 	scale  float64 // largest voltage of the sources
 	grain  float64 // shortest time that is told apart
 	square bool    // some source is a square wave
+	room   *room
 
 	n          int
 	place      []int // by free potential: its unknown
@@ -104,7 +105,7 @@ func newSystem(c *circuit.Circuit, frequency, leak float64) (*system, error) {
 	if err != nil {
 		return nil, err
 	}
-	s := &system{c: c, frame: f, omega: 2 * math.Pi * frequency, period: 1 / frequency, n: f.count}
+	s := &system{c: c, frame: f, omega: 2 * math.Pi * frequency, period: 1 / frequency, n: f.count, room: &room{}}
 	if s.measure(frequency); s.scale == 0 {
 		s.scale = 1 // nothing drives it; any scale serves
 	}

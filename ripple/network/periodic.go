@@ -32,7 +32,7 @@ func (s *shooter) periodic() *Periodic {
 	w.add(s.pace.work)
 	w.add(s.peaks.work)
 	w.Unknowns, w.States = s.n, s.states()
-	s.pace.track.factors = nil
+	s.room.give(s.pace.track)
 	return &Periodic{Circuit: s.c, Frequency: quantity.Frequency(1 / s.period), Work: w, Assumptions: s.assumptions,
 		track: s.pace.track, guess: s.guessed()}
 }

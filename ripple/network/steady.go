@@ -59,7 +59,11 @@ func compile(c *circuit.Circuit, o *Options) (*system, error) {
 	if frequency == 0 {
 		frequency = Drive(c)
 	}
-	return newSystem(c, float64(frequency), smallestLeak*float64(frequency))
+	s, err := newSystem(c, float64(frequency), smallestLeak*float64(frequency))
+	if err == nil && o.From != nil {
+		s.room = o.From.track.room
+	}
+	return s, err
 }
 
 // attempt is one way to begin a search.

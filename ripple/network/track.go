@@ -43,7 +43,7 @@ const block = 64
 // slot is where the factors of the next step go.
 func (t *track) slot() []trio {
 	if k := len(t.steps); k == block*len(t.factors) {
-		t.factors = append(t.factors, make([]trio, block*t.pattern.size()))
+		t.factors = append(t.factors, t.room.take(block*t.pattern.size()))
 	}
 	return t.factorsOf(len(t.steps))
 }

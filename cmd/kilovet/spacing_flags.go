@@ -52,7 +52,7 @@ func tableOf(path string) string {
 // newGapFlags declares the flags from the declaration of the description.
 func newGapFlags(set *pflag.FlagSet) *gapFlags {
 	g := &gapFlags{set: set}
-	for _, d := range document.Describe(&chain.Chain{}) {
+	for _, d := range document.DescribeTables(&chain.Chain{}, "site", "spacing") {
 		table, rest, _ := strings.Cut(d.Path, ".")
 		switch {
 		case tableOf(d.Path) != "":

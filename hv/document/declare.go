@@ -2,6 +2,7 @@ package document
 
 import (
 	"reflect"
+	"slices"
 	"strings"
 
 	"kilovet/hv/quantity"
@@ -123,6 +124,17 @@ func join(path, key string) string {
 // Describe lists every key that a description read into the struct may hold, depth
 // first in the order of the fields.
 func Describe(into any) []Declared { return describe(structType(into), "") }
+
+// DescribeTables is Describe of some of the tables of the file alone.
+func DescribeTables(into any, tables ...string) []Declared {
+	var all []Declared
+	for _, d := range declare(structType(into), "") {
+		if slices.Contains(tables, d.Key) {
+			all = append(append(all, d), describe(d.kind, d.Path)...)
+		}
+	}
+	return all
+}
 
 func describe(t reflect.Type, path string) []Declared {
 	var all []Declared

@@ -2,12 +2,30 @@ package document_test
 
 import (
 	"fmt"
+	"slices"
 	"strings"
 	"testing"
 
 	"kilovet/hv/document"
 	"kilovet/hv/quantity"
 )
+
+// Of some tables the same is said as of all.
+func TestDescribeTables(t *testing.T) {
+	var want []string
+	for _, d := range document.Describe(&bench{}) {
+		if table, _, _ := strings.Cut(d.Path, "."); table == "supply" {
+			want = append(want, d.Path)
+		}
+	}
+	var got []string
+	for _, d := range document.DescribeTables(&bench{}, "supply") {
+		got = append(got, d.Path)
+	}
+	if len(want) == 0 || !slices.Equal(got, want) {
+		t.Errorf("%q, not %q", got, want)
+	}
+}
 
 func TestDescribeListsEveryKey(t *testing.T) {
 	var got []string

@@ -27,7 +27,8 @@ const scope quantity.Voltage = 1500
 func ClearanceNeeded(g gap.Gap, v gap.Voltages) (gap.Answer[quantity.Length], error) {
 	var none gap.Answer[quantity.Length]
 	if clearance := mediumOf(g).clearance; clearance != nil {
-		return clearance(g, v.For(g.Class()))
+		a, err := clearance(g, v.For(g.Class()))
+		return forStep(g, a), err
 	}
 	if err := inAir(g); err != nil {
 		return none, err
@@ -156,15 +157,6 @@ func electrical(g gap.Gap, v gap.Voltages, field table.Case) ([]demand, error) {
 	return asked, nil
 }
 
-// safetyStep is what the peak is multiplied by before Table F.8 is read: 160 % for
-// reinforced insulation (IEC 60664-1, memory).
-func safetyStep(g gap.Gap) quantity.Voltage {
-	if g.Class() == gap.Reinforced {
-		return 1.6
-	}
-	return 1
-}
-
 func steadyDemand(g gap.Gap, peak quantity.Voltage, field table.Case) (demand, error) {
 	if column := table.SteadyClearance(field); g.Class() == gap.Functional && field == table.CaseA && peak > column.Last() {
 		return functionalDemand(peak)
@@ -174,6 +166,7 @@ func steadyDemand(g gap.Gap, peak quantity.Voltage, field table.Case) (demand, e
 	d := demand{Reading: r, why: quantity.Text(peak) + " peak"}
 	if step > 1 {
 		d.why = "reinforced, 160 % of " + d.why
+		d.extra = append(d.extra, stepSource)
 	}
 	if peak > scope {
 		d.Note = "beyond the standard's scope of 1.5 kV DC, whose table is used to its last row"
@@ -189,8 +182,9 @@ func impulseDemand(g gap.Gap, v gap.Voltages, field table.Case) ([]demand, error
 	}
 	why := "impulse of " + quantity.Text(u)
 	if g.Class() == gap.Reinforced {
-		u = table.ReinforcedImpulse(u)
-		why = "reinforced, next step " + quantity.Text(u)
+		more := table.ReinforcedImpulse(u)
+		u, why = more.Value, "reinforced, "+more.Rows+" "+quantity.Text(more.Value)
+		sources = append(sources, more.Source)
 	}
 	column, err := table.ImpulseClearance(field, degreeOn(g))
 	if err != nil {

@@ -145,3 +145,24 @@ func TestPastTheLastRowIsALack(t *testing.T) {
 		t.Error("creepage past 63 kV")
 	}
 }
+
+// The 160 % of reinforced insulation is from memory, and so marked beside the table, in every
+// medium whose distance it sets; basic insulation does not name it.
+func TestTheStepOfReinforcedInsulationHasItsSource(t *testing.T) {
+	altitude := quantity.Length(0)
+	for _, medium := range []gap.Medium{gap.Air, gap.Vacuum, gap.Oil, gap.Solid} {
+		for class, want := range map[gap.Insulation]bool{gap.Basic: false, gap.Reinforced: true} {
+			g := gap.Gap{Medium: medium, Insulation: class, Material: "epoxy", Clearance: 10e-3, Altitude: &altitude, Temperature: 293.15, PollutionDegree: 2, Shape: &gap.Shape{Kind: gap.Plates}}
+			a, err := insulation.ClearanceNeeded(g, gap.Voltages{Peak: 5e3, LongTerm: 5e3})
+			if err != nil {
+				t.Fatalf("%s: %v", medium, err)
+			}
+			named := slices.ContainsFunc(a.Sources, func(s gap.Source) bool {
+				return strings.Contains(s.Text, "160 %") && s.Mark == gap.Memory && !s.Governs
+			})
+			if named != want {
+				t.Errorf("%s, %s: %v", medium, class, a.Sources)
+			}
+		}
+	}
+}

@@ -17,7 +17,8 @@ import (
 func CreepageNeeded(g gap.Gap, v gap.Voltages) (gap.Answer[quantity.Length], error) {
 	var none gap.Answer[quantity.Length]
 	if creepage := mediumOf(g).creepage; creepage != nil {
-		return creepage(g, v.For(g.Class()))
+		a, err := creepage(g, v.For(g.Class()))
+		return forStep(g, a), err
 	}
 	if g.Medium == gap.InGas && g.Filling() != gap.AirGas {
 		return alongInGas(g, v)
@@ -79,7 +80,8 @@ func stepped(g gap.Gap, longTerm quantity.Voltage, of string, r table.Reading[qu
 		Sources: []gap.Source{r.Source.Governing()},
 	}
 	if g.Class() == gap.Reinforced {
-		a.Value, a.Because = 2*a.Value, "reinforced, twice "+a.Because // IEC 60664-1, read in TI SLUAAR5
+		a.Value, a.Because = 2*a.Value, "reinforced, twice "+a.Because
+		a.Sources = append(a.Sources, twiceSource)
 	}
 	if r.Note != "" {
 		a.Because += "; " + r.Note

@@ -5,6 +5,7 @@ import (
 
 	"kilovet/hv/lack"
 	"kilovet/hv/quantity"
+	"kilovet/insulation/gap"
 )
 
 // mainsRows is IEC 60664-1:2020 Table F.1: line-to-neutral voltage up to and
@@ -53,11 +54,13 @@ var preferredImpulses = []quantity.Voltage{330, 500, 800, 1500, 2500, 4000, 6000
 // ReinforcedImpulse is the impulse voltage that reinforced insulation is dimensioned
 // for: the next preferred value above the basic one, or 160 % of it where it is not
 // in the series or ends it (the step read, the 160 % from memory).
-func ReinforcedImpulse(basic quantity.Voltage) quantity.Voltage {
+func ReinforcedImpulse(basic quantity.Voltage) Reading[quantity.Voltage] {
 	for i, u := range preferredImpulses[:len(preferredImpulses)-1] {
 		if quantity.Equal(u, basic) {
-			return preferredImpulses[i+1]
+			return Reading[quantity.Voltage]{Value: preferredImpulses[i+1], Rows: "next step",
+				Source: gap.Source{Text: "IEC 60664-1, reinforced insulation takes the next preferred impulse, in Texas Instruments SLUAAR5", Mark: gap.Read}}
 		}
 	}
-	return 1.6 * basic
+	return Reading[quantity.Voltage]{Value: 1.6 * basic, Rows: "160 %",
+		Source: gap.Source{Text: "IEC 60664-1, reinforced insulation takes 160 % of an impulse outside the preferred series", Mark: gap.Memory}}
 }

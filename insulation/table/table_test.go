@@ -56,7 +56,7 @@ func TestReinforcedImpulseIsTheNextStep(t *testing.T) {
 		4000: 6000, 330: 500, 8000: 12000, // in the series
 		12000: 19200, 3000: 4800, 5000: 8000, // its end and outside: 160 %
 	} {
-		if got := table.ReinforcedImpulse(basic); !quantity.Equal(got, want) {
+		if got := table.ReinforcedImpulse(basic).Value; !quantity.Equal(got, want) {
 			t.Errorf("%v V: %v, want %v", basic, got, want)
 		}
 	}

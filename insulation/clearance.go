@@ -70,7 +70,7 @@ func needIn(field table.Case, g gap.Gap, v gap.Voltages, factor table.Reading[qu
 	if err := bluntEnough(g, v, a.Value); err != nil {
 		return none, err
 	}
-	a.Because += unread(g, v.Peak)
+	a.Because += unread(g, v)
 	a.Shown = append(a.Shown, compared(g, v)...)
 	return a, nil
 }
@@ -233,11 +233,8 @@ func secondaryDemand(g gap.Gap, peak quantity.Voltage) []demand {
 }
 
 // unread says where IEC 61010-1 asks for something and its table was not read.
-func unread(g gap.Gap, peak quantity.Voltage) string {
-	if g.Mains == nil || !g.Mains.Secondary {
-		return ""
-	}
-	if _, err := table.SecondaryClearance(peak, g.Mains.LineToNeutral, g.Mains.Category); err == nil {
+func unread(g gap.Gap, v gap.Voltages) string {
+	if !Unread(g, v) {
 		return ""
 	}
 	return fmt.Sprintf("; what IEC 61010-1 asks for behind a mains of overvoltage category %d was not read and is not in it", g.Mains.Category)

@@ -162,6 +162,29 @@ func SecondaryClearance(peak, lineToNeutral quantity.Voltage, category int) (Rea
 	return none, lack.Range("IEC 61010-1 Tables K.11, K.12 end at a mains of 1000 V, asked for %s", quantity.Text(lineToNeutral))
 }
 
+// SecondaryAtMost is what IEC 61010-1 asks for at most in a secondary circuit behind a mains
+// of category 1 or 2, whose tables were not read: what Table K.11 asks for at a mains of the
+// same rated impulse, or the next larger. Where K.11 and K.12 have a rated impulse in common
+// they have the same distances (derived).
+func SecondaryAtMost(peak, lineToNeutral quantity.Voltage, category int) (Reading[quantity.Length], error) {
+	impulse, err := RatedImpulse(lineToNeutral, category)
+	if err != nil {
+		return Reading[quantity.Length]{}, err
+	}
+	for i, band := range mainsBands {
+		third, err := RatedImpulse(band, 3)
+		if err != nil {
+			return Reading[quantity.Length]{}, err
+		}
+		if quantity.AtLeast(third.Value, impulse.Value) {
+			r, err := secondary[0][i].Step(peak)
+			r.Source.Mark = gap.Derived
+			return r, err
+		}
+	}
+	return Reading[quantity.Length]{}, lack.Range("IEC 61010-1 Table K.11 ends at an impulse of 8 kV, asked for %s", quantity.Text(impulse.Value))
+}
+
 var testPairs = Of(laboratory("Tables K.11, K.12, pairs of clearance and test"), "clearance", pairRows, 1, millimetre, volt)
 
 // TestVoltage is the AC r.m.s. voltage, 50 or 60 Hz for at least 5 s, with which a

@@ -270,3 +270,28 @@ func TestNothingWorseNeedsLess(t *testing.T) {
 		}
 	})
 }
+
+// IEC 60664-1 Table F.1: category IV at 150, 300, 600 V has the impulses of category III at 300,
+// 600, 1000 V, 4, 6, 8 kV, and IEC 61010-1 has the same distances there in K.12 and K.11 in every
+// row. So category II at 300 and 600 V, 2.5 and 4 kV, has those of III at 150 and 300 V at most.
+func TestDistancesOfTheLaboratoryStandardFollowTheImpulse(t *testing.T) {
+	for _, peak := range []quantity.Voltage{20, 70, 420, 840, 1400, 2240, 4480, 7000, 11200} {
+		for four, three := range map[quantity.Voltage]quantity.Voltage{150: 300, 300: 600, 600: 1000} {
+			a, err1 := table.SecondaryClearance(peak, four, 4)
+			b, err2 := table.SecondaryClearance(peak, three, 3)
+			if err1 != nil || err2 != nil || !quantity.Equal(a.Value, b.Value) {
+				t.Errorf("%v V: %v behind IV at %v, %v behind III at %v", peak, a.Value, four, b.Value, three)
+			}
+		}
+		for two, three := range map[quantity.Voltage]quantity.Voltage{150: 150, 300: 150, 600: 300, 1000: 600} {
+			a, err1 := table.SecondaryAtMost(peak, two, 2)
+			b, err2 := table.SecondaryClearance(peak, three, 3)
+			if err1 != nil || err2 != nil || !quantity.Equal(a.Value, b.Value) {
+				t.Errorf("%v V behind II at %v: %v, behind III at %v: %v", peak, two, a.Value, three, b.Value)
+			}
+		}
+	}
+	if _, err := table.SecondaryAtMost(12e3, 230, 2); lack.Of(err) == nil {
+		t.Error("12 kV is past Table K.11")
+	}
+}

@@ -116,6 +116,7 @@ func distance(e *evidence.Evidence, s *chain.Spacing, id string, given document.
 	f.Because += taken
 	f = shareOf(f, x)
 	f = f.Least(rule.Of(counted), rule.Of(need.Value), limits.DistanceMargin).Assume(need.Assumptions...).Assume(classTaken(s)...).Assume(transients(e, s, x, counted)...).Assume(coverTaken(id, x, need.Value, counted)...)
+	f = f.Assume(laboratoryTaken(x, counted)...)
 	if f.Verdict != rule.Meets {
 		f.Remedy = furtherApart(e, s, x, f, given, need.Value+given.V-counted)
 	}

@@ -19,7 +19,7 @@ type StrengthBounds struct {
 // whose laws also hold left of the Paschen minimum, of boards, oil and solids, and of surfaces
 // in vacuum. The upper one
 // in other gases than air is that of plates, or that helium, argon, hydrogen and carbon
-// dioxide stand no more than air.
+// dioxide stand no more than air; in what is called vacuum and is none, that of the gas left.
 func BreakdownBounds(g gap.Gap, sharp gap.Polarity) StrengthBounds {
 	law := func(g gap.Gap) (gap.Answer[quantity.Voltage], error) { return Breakdown(g, sharp) }
 	b := StrengthBounds{Least: gap.ResultOf(narrower(g, law))}
@@ -28,8 +28,11 @@ func BreakdownBounds(g gap.Gap, sharp gap.Polarity) StrengthBounds {
 	} else {
 		b.Most = gap.ResultOf(wider(g, law))
 	}
-	if b.Most.Lack != nil && weaker(g) {
+	switch {
+	case b.Most.Lack != nil && weaker(g):
 		b.Most = gap.ResultOf(asAir(g, sharp))
+	case b.Most.Lack != nil && g.Medium == gap.Vacuum:
+		b.Most = gap.ResultOf(Rarefied(g))
 	}
 	return b
 }

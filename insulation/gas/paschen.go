@@ -149,3 +149,10 @@ func AtProduct(g gap.Gas, pd quantity.PressureLength) (quantity.Voltage, error) 
 	}
 	return a.Value, err
 }
+
+// RightOfMinimum reports whether a gas over a distance has more of pressure times gap than
+// where its lowest breakdown voltage was measured.
+func RightOfMinimum(s State, d quantity.Length) (bool, error) {
+	m, err := MeasuredMinimum(s.Gas)
+	return err == nil && quantity.AtLeast(s.reduced(d), m.At), err
+}

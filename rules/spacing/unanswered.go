@@ -51,6 +51,10 @@ func unanswered(e *evidence.Evidence, f rule.Finding, s *chain.Spacing, x eviden
 		f.Sources = append(rule.Cited(b.Most.Sources), breakdownSource)
 		f = stands(b.Most.Value, "most", b.Most.Because, 0)
 		f.Remedy = alternatives(againstBreakdown(e, s, x), "take a stronger medium")
+		if noVacuum(s, x) {
+			f.Remedy = "pump lower before the voltage is switched on"
+			f = f.Assume("the gas left in the vessel is " + string(x.Gap.Filling()))
+		}
 		return f
 	}
 	f.Because = within(v, b)
@@ -59,6 +63,13 @@ func unanswered(e *evidence.Evidence, f rule.Finding, s *chain.Spacing, x eviden
 		f.Remedy = measured(s, "at which voltage this gap breaks down", "keep the peak under 80 % of it")
 	}
 	return f
+}
+
+// noVacuum reports whether a gap that is called vacuum has a pressure at which the laws of
+// vacuum do not hold.
+func noVacuum(s *chain.Spacing, x evidence.Spacing) bool {
+	_, err := insulation.Rarefied(x.Gap)
+	return s.Medium.V == "vacuum" && err == nil
 }
 
 // measured says what to measure where no law answers, and what else would do.

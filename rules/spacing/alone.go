@@ -14,8 +14,8 @@ func gapShort(s *chain.Spacing, x evidence.Spacing) string {
 	if x.Gap.Medium != gap.Vacuum || !s.Clearance.Set() || x.Gap.Shape == nil {
 		return ""
 	}
-	a, err := x.StandsOver(x.Gap.Clearance)
-	if err != nil || quantity.AtLeast(a.Value, comfortable(x)) {
+	most := x.Across().BreakdownBounds().Most // the breakdown itself where a law answers the gap
+	if most.Lack != nil || quantity.AtLeast(most.Value, comfortable(x)) {
 		return ""
 	}
 	return " for the surface; for the gap " + conflict(s, x)

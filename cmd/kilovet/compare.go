@@ -30,9 +30,9 @@ func compareCommand(w world) *cobra.Command {
 		Long: `Review two descriptions and show what differs: inputs, figures beyond a
 millionth, verdicts. - reads one of them from standard input.
 
-Exit status: 0 no verdict is worse in the new one; 1 some verdict is; 2 a
-description or the command line cannot be used; 3 a file could not be read
-or written.`,
+Exit status: 0 no verdict is worse in the new one; 1 some verdict is, or what
+was met is judged no longer (a rule judges fewer than it did); 2 a description
+or the command line cannot be used; 3 a file could not be read or written.`,
 		Args:              cobra.ExactArgs(2),
 		RunE:              func(_ *cobra.Command, args []string) error { return c.run(args[0], args[1]) },
 		ValidArgsFunction: descriptions,

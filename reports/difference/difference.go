@@ -34,12 +34,12 @@ const (
 // word says in a word how a finding changed.
 func word(f compare.Finding) string {
 	switch {
+	case f.New == nil:
+		return "gone"
 	case f.Worse:
 		return "worse"
 	case f.Old == nil:
 		return "new"
-	case f.New == nil:
-		return "gone"
 	}
 	return "better"
 }

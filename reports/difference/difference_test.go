@@ -84,12 +84,16 @@ func TestGolden(t *testing.T) {
 }
 
 func TestSentence(t *testing.T) {
+	worse := compare.Finding{New: &rule.Finding{}, Worse: true}
+	lost := compare.Finding{Old: &rule.Finding{}, Worse: true}
 	for want, d := range map[string]compare.Difference{
-		"Nothing differs.":      {},
-		"No verdict is worse.":  {Inputs: []compare.Input{{At: "title"}}},
-		"1 finding is worse.":   {Worse: true, Findings: []compare.Finding{{Worse: true}, {}}},
-		"2 findings are worse.": {Worse: true, Findings: []compare.Finding{{Worse: true}, {Worse: true}}},
-		"The whole is worse.":   {Worse: true, Is: rule.Unassessed},
+		"Nothing differs.":                            {},
+		"No verdict is worse.":                        {Inputs: []compare.Input{{At: "title"}}},
+		"1 finding is worse.":                         {Worse: true, Findings: []compare.Finding{worse, {}}},
+		"2 findings are worse.":                       {Worse: true, Findings: []compare.Finding{worse, worse}},
+		"1 finding that was met is judged no longer.": {Worse: true, Findings: []compare.Finding{lost, {}}},
+		"1 finding is worse; 2 findings that were met are judged no longer.": {Worse: true, Findings: []compare.Finding{lost, worse, lost}},
+		"The whole is worse.": {Worse: true, Is: rule.Unassessed},
 	} {
 		got := string(difference.Text(&difference.Report{Difference: d}, difference.Options{}))
 		if !strings.Contains(got, "\n"+want+"\n") {

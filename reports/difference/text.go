@@ -4,6 +4,7 @@ import (
 	"bytes"
 	"fmt"
 	"math"
+	"slices"
 	"strings"
 
 	"kilovet/hv/quantity"
@@ -58,23 +59,35 @@ func side(s Side, v rule.Verdict) string {
 
 // sentence says in one sentence how the new side stands to the old.
 func sentence(r *Report) string {
-	worse := 0
+	worse, lost := 0, 0
 	for _, f := range r.Findings {
-		if f.Worse {
+		switch {
+		case f.Worse && f.New == nil:
+			lost++
+		case f.Worse:
 			worse++
 		}
 	}
 	switch {
-	case worse == 1:
-		return "1 finding is worse."
-	case worse > 0:
-		return fmt.Sprintf("%d findings are worse.", worse)
+	case worse+lost > 0:
+		return strings.Join(slices.Concat(counted(worse, "is worse", "are worse"), counted(lost, "that was met is judged no longer", "that were met are judged no longer")), "; ") + "."
 	case r.Worse:
 		return "The whole is worse."
 	case r.Nothing():
 		return "Nothing differs."
 	}
 	return "No verdict is worse."
+}
+
+// counted says of how many findings something holds; of none, nothing.
+func counted(n int, of1, ofMore string) []string {
+	switch n {
+	case 0:
+		return nil
+	case 1:
+		return []string{"1 finding " + of1}
+	}
+	return []string{fmt.Sprintf("%d findings %s", n, ofMore)}
 }
 
 func rewritten(in compare.Input) string {

@@ -23,7 +23,8 @@ type Difference struct {
 	Figures  []Figure
 	Findings []Finding
 	// Worse reports whether the whole or any finding has a worse verdict than before,
-	// or one fails or is unassessed that was not there.
+	// one fails or is unassessed that was not there, or one that was met is gone and its
+	// rule judges fewer than it did.
 	Worse bool
 }
 

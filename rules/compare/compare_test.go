@@ -101,13 +101,20 @@ func TestWorse(t *testing.T) {
 		{rule.Meets, rule.Marginal, 1, true}, {rule.Marginal, rule.Unassessed, 1, true}, {rule.Unassessed, rule.Fails, 1, true},
 		{rule.Fails, rule.Unassessed, 1, false}, {rule.Fails, rule.Meets, 1, false},
 		{"", rule.Meets, 1, false}, {"", rule.Marginal, 1, false}, {"", rule.Unassessed, 1, true}, {"", rule.Fails, 1, true},
-		{rule.Fails, "", 1, false},
+		{rule.Fails, "", 1, false}, {rule.Marginal, "", 1, false}, {rule.Meets, "", 1, true},
 	} {
 		// A finding that fails on both sides keeps the verdict of the whole out of it.
 		d := compare.Of(judged(rule.Fails, c.old), judged(rule.Fails, c.new))
 		if len(d.Findings) != c.changed || d.Worse != c.worse {
 			t.Errorf("%q to %q: %d changed, worse %t", c.old, c.new, len(d.Findings), d.Worse)
 		}
+	}
+}
+
+// A subject that bears another name is judged as it was.
+func TestARenamedSubjectIsNotWorse(t *testing.T) {
+	if d := compare.Of(judged(rule.Fails, rule.Meets), judged(rule.Fails, "", rule.Meets)); len(d.Findings) != 2 || d.Worse {
+		t.Errorf("%+v", d)
 	}
 }
 

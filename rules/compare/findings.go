@@ -10,13 +10,26 @@ func findings(old, new []rule.Finding) []Finding {
 			continue
 		}
 		f := p.first()
-		changed = append(changed, Finding{f.Rule, f.Subject, p.old, p.new, worse(p.old, p.new)})
+		lost := p.new == nil && p.old.Verdict == rule.Meets && judged(new, f.Rule) < judged(old, f.Rule)
+		changed = append(changed, Finding{f.Rule, f.Subject, p.old, p.new, lost || worse(p.old, p.new)})
 	}
 	return changed
 }
 
-// worse reports whether a finding stands worse than before; one that is gone does
-// not, one that is new does where it stands against switching on.
+// judged counts the findings of a rule. A subject that is renamed leaves their number; one
+// that is taken out lowers it, and what was met there is judged no longer.
+func judged(findings []rule.Finding, name string) int {
+	n := 0
+	for _, f := range findings {
+		if f.Rule == name {
+			n++
+		}
+	}
+	return n
+}
+
+// worse reports whether a finding stands worse than before; one that is gone may be
+// mended, one that is new does where it stands against switching on.
 func worse(old, new *rule.Finding) bool {
 	switch {
 	case new == nil:

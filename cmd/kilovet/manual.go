@@ -3,6 +3,7 @@ package main
 import (
 	"bytes"
 	"fmt"
+	"os"
 	"path/filepath"
 	"strings"
 
@@ -13,6 +14,7 @@ func manualCommand(w world) *cobra.Command {
 	return &cobra.Command{
 		Use:   "manual FOLDER",
 		Short: "Write the manual pages of all commands into a folder",
+		Long:  "Write the manual pages of all commands into a folder, which is made if it is\nnot there.",
 		Example: `  kilovet manual ~/.local/share/man/man1        then: man kilovet-review
   kilovet manual . && man ./kilovet.1           to look at them first`,
 		Args: cobra.ExactArgs(1),
@@ -23,13 +25,16 @@ func manualCommand(w world) *cobra.Command {
 	}
 }
 
-// manual writes a page for each command.
+// manual writes a page for each command into the folder, which is made if it is not there.
 func (w world) manual(root *cobra.Command, folder string) error {
 	var outputs []output
 	for _, c := range append([]*cobra.Command{root}, root.Commands()...) {
 		if c == root || c.IsAvailableCommand() {
 			outputs = append(outputs, output{filepath.Join(folder, pageName(c)+".1"), manualPage(c)})
 		}
+	}
+	if err := os.MkdirAll(folder, 0o777); err != nil {
+		return exitf(files, "the folder %s cannot be made: %v; nothing was written", folder, plain(err))
 	}
 	if err := replaceAll(outputs); err != nil {
 		return err

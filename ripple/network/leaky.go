@@ -137,7 +137,8 @@ func leakUnit(c *circuit.Circuit, o Options) float64 {
 }
 
 // apart is the largest difference of two states of one circuit in the mean of a node, in
-// parts of the largest mean.
+// parts of the largest voltage that a node ever has: where a fault leaves nothing but the
+// drive, that is the drive's.
 func apart(a, b *Periodic) float64 {
 	most, largest := 0.0, 0.0
 	for n := 1; n < a.Circuit.Nodes(); n++ {
@@ -147,7 +148,7 @@ func apart(a, b *Periodic) float64 {
 			continue
 		}
 		most = max(most, math.Abs(float64(x.Mean-y.Mean)))
-		largest = max(largest, math.Abs(float64(y.Mean)))
+		largest = max(largest, float64(y.Peak()))
 	}
 	if largest == 0 {
 		return 0

@@ -62,7 +62,7 @@ earthing_rod = { resistance = "100 kohm" }
 // the divider has run down: the meter shows nothing.
 func TestMeterShowsNothingOfWhatStays(t *testing.T) {
 	found := 0
-	for _, row := range tableOf(t, reviewed(t, described(t, "column")), "energy.one_open").Rows {
+	for _, row := range tableOf(t, reviewedWhole(t, described(t, "column")), "energy.one_open").Rows {
 		if !strings.HasPrefix(row[0].Text, "multiplier.diode") || !strings.HasPrefix(row[2].Text, "stays at") {
 			continue
 		}
@@ -81,7 +81,7 @@ func TestMeterShowsNothingOfWhatStays(t *testing.T) {
 // the divider that is open itself reads high.
 func TestMeterWhereAllComesDown(t *testing.T) {
 	shows := 0
-	for _, row := range tableOf(t, reviewed(t, described(t, "column")), "energy.one_open").Rows {
+	for _, row := range tableOf(t, reviewedWhole(t, described(t, "column")), "energy.one_open").Rows {
 		if row[3].Value == nil || strings.HasPrefix(row[0].Text, "divider.") {
 			continue
 		}

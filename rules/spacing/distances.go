@@ -164,7 +164,7 @@ func unneeded(e *evidence.Evidence, f rule.Finding, s *chain.Spacing, x evidence
 		return bounded(f, s, x, why)
 	case f.Rule == "spacing.clearance" && tooSharp(s, x):
 		return neverEnough(e, f, s, x, why)
-	case inAir(s) && given.Set() && why.Kind == lack.Outside:
+	case (inAir(s) || s.Medium.V == "vacuum" && f.Rule == "spacing.creepage") && given.Set() && why.Kind == lack.Outside:
 		return pastTables(f, s, x, given, why)
 	}
 	f = f.Lacking(why)

@@ -59,3 +59,20 @@ func TestADistanceThatIsMarginalStillIsNamedWhereNoneIsComfortable(t *testing.T)
 		t.Errorf("%g mm: %s: %s", 0.9*need, f.Verdict, f.Because)
 	}
 }
+
+// More voltage never makes a surface in vacuum look better: alumina of 10 kV at 10 mm by the root
+// of the length asks for 122.5 mm at 35 kV and for more than the 300 mm that are known past 54.8 kV,
+// so 299 mm are too little there and 310 mm are left open.
+func TestASurfacePastTheLongestKnownFailsWhereItIsShorter(t *testing.T) {
+	at := func(kilovolts, creepage float64) rule.Finding {
+		return findings(t, site(0)+fmt.Sprintf("[[spacing]]\nname = \"g\"\nvoltage = \"%g kV\"\nmedium = \"vacuum\"\ninsulation = \"basic\"\nclearance = \"14 mm\"\ncreepage = \"%g mm\"\nmaterial = \"alumina\"\njunction_angle = \"60 deg\"\nshape = { kind = \"plates\" }\n", kilovolts, creepage))["spacing.creepage | g"]
+	}
+	for _, c := range []struct {
+		kilovolts, creepage float64
+		verdict             rule.Verdict
+	}{{35, 120, rule.Fails}, {35, 140, rule.Marginal}, {60, 14.7, rule.Fails}, {105, 299, rule.Fails}, {60, 310, rule.Unassessed}, {105, 310, rule.Unassessed}} {
+		if f := at(c.kilovolts, c.creepage); f.Verdict != c.verdict {
+			t.Errorf("%g kV along %g mm: %s: %s", c.kilovolts, c.creepage, f.Verdict, f.Because)
+		}
+	}
+}

@@ -11,8 +11,8 @@ import (
 	"kilovet/rules/rule"
 )
 
-// pastTables judges a distance in air past the last row of the tables: less than that row
-// asks for is too little, more is unassessed.
+// pastTables judges a distance in air past the last row of the tables, or a surface in vacuum
+// past the longest that is known: less than those is too little, more is unassessed.
 func pastTables(f rule.Finding, s *chain.Spacing, x evidence.Spacing, given document.Given[quantity.Length], why *lack.Lack) rule.Finding {
 	ask := x.ClearanceAtLeast
 	if f.Rule == "spacing.creepage" {
@@ -38,6 +38,10 @@ func pastTables(f rule.Finding, s *chain.Spacing, x evidence.Spacing, given docu
 	f.Because = ""
 	f = f.Lacking(why)
 	f.Because = because
-	f.Remedy = alternatives("lower the voltage", "prove it by a voltage test that a local code or a standard of the product names")
+	proof := "prove it by a voltage test that a local code or a standard of the product names"
+	if s.Medium.V == "vacuum" {
+		proof = "divide the surface into stages, or give a tested one: spacing.tested_voltage, spacing.tested_length"
+	}
+	f.Remedy = alternatives("lower the voltage", proof)
 	return f
 }

@@ -5,6 +5,7 @@ import (
 	"slices"
 	"strings"
 
+	"kilovet/hv/quantity"
 	"kilovet/rules/evidence"
 	"kilovet/rules/exhibit"
 	"kilovet/rules/fault"
@@ -20,16 +21,28 @@ func faultTable(e *evidence.Evidence) []exhibit.Table {
 		ID: "faults.outcomes", Chapter: exhibit.Faults, Title: "Single faults and errors of assembly, the worst first", Basis: evidence.Basis,
 		Columns: []exhibit.Column{{Head: "fault"}, {Head: "drive peak", Unit: "V"}, {Head: "output", Unit: "V"},
 			{Head: "most loaded"}, {Head: "part of what is allowed", Unit: "1"}, {Head: "limits passed"}, {Head: "caught by"}, {Head: "what to add"}},
-		Note: "The drive is where the regulation comes to rest with the fault, up to its limit. Allowed are whole ratings, and the touch limits of a single fault; the usual shares of ratings are for what lasts.",
+		Note: "The drive is where the regulation comes to rest with the fault, up to its limit. Allowed are whole ratings, and the touch limits of a single fault; the usual shares of ratings are for what lasts. An output under a millionth of the largest here is what rounding leaves, and stands as 0 V.",
 	}
 	all := slices.Clone(fault.StudyAll(e))
 	slices.SortStableFunc(all, func(a, b fault.Outcome) int {
 		return cmp.Or(cmp.Compare(graveness(b), graveness(a)), cmp.Compare(loaded(b), loaded(a)))
 	})
+	least := 1e-6 * largestOutput(all)
 	for _, o := range all {
+		if max(o.Output, -o.Output) < least {
+			o.Output = 0
+		}
 		t.Rows = append(t.Rows, outcomeRow(o))
 	}
 	return []exhibit.Table{t}
+}
+
+func largestOutput(all []fault.Outcome) quantity.Voltage {
+	most := quantity.Voltage(0)
+	for _, o := range all {
+		most = max(most, o.Output, -o.Output)
+	}
+	return most
 }
 
 // graveness orders outcomes: what passes a limit and nothing catches, what is not known,

@@ -66,7 +66,7 @@ func (w *flow) heights(half area, blocks []page.Block) []float64 {
 // the columns then are; no piece begins it where it is better to break one.
 func split(heights []float64) (second int, high float64) {
 	all, first := sum(heights), 0.0
-	high = all
+	second, high = len(heights), all // a single low piece stands whole in the first column
 	for i, h := range heights {
 		first += h
 		if m := max(first, all-first); m < high {

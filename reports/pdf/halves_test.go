@@ -101,3 +101,20 @@ func TestPiecesStayWhole(t *testing.T) {
 		}
 	}
 }
+
+// A low table stands whole, in the first column.
+func TestLowTableStandsWhole(t *testing.T) {
+	f := testFonts(t)
+	table := page.Table{Columns: []page.Column{{Title: "one", Share: 1}}}
+	for i := range 4 {
+		table.Rows = append(table.Rows, page.Row{Cells: []page.Cell{{Lines: []page.Line{{Text: fmt.Sprintf("row%d", i)}}}}})
+	}
+	w := newFlow(f, a4, testPen())
+	w.turn()
+	w.block(page.Halves{Blocks: []page.Block{table}})
+	for _, p := range places(f, w.sheets[0]) {
+		if p.left >= (a4.left+a4.right)/2 {
+			t.Errorf("%+v stands in the second column", p)
+		}
+	}
+}

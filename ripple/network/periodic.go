@@ -33,6 +33,7 @@ func (s *shooter) periodic() *Periodic {
 	w.add(s.peaks.work)
 	w.Unknowns, w.States = s.n, s.states()
 	s.room.give(s.pace.track)
+	s.pace.factor = make([]trio, s.pattern.size()) // what was given belongs to others
 	return &Periodic{Circuit: s.c, Frequency: quantity.Frequency(1 / s.period), Work: w, Assumptions: s.assumptions,
 		track: s.pace.track, guess: s.guessed()}
 }

@@ -73,12 +73,7 @@ func chapters(pen *drawing.Pen, r *rules.Review) []chapter {
 	return all
 }
 
-func titled(title, subject string) string {
-	if subject != "" {
-		title += ", " + subject
-	}
-	return clean(title)
-}
+func titled(title, subject string) string { return clean(digest.Titled(title, subject)) }
 
 func exhibitedOf(id string, t exhibit.Table) exhibited {
 	out := exhibited{ID: id, Title: titled(t.Title, t.Subject), Note: clean(t.Note), Basis: clean(t.Basis), Folded: folded(t)}

@@ -105,10 +105,7 @@ func (n *writer) curves(c digest.Chapter) []Block {
 }
 
 func caption(title, subject, basis, note string) string {
-	if subject != "" {
-		title += ", " + subject
-	}
-	text := title + "."
+	text := digest.Titled(title, subject) + "."
 	if note != "" {
 		text += " " + digest.Capital(strings.TrimSuffix(note, ".")) + "."
 	}
@@ -170,10 +167,7 @@ func (n *writer) tables(c digest.Chapter) []Block {
 	var all []Block
 	for _, t := range c.Tables {
 		to := anchor("table", t.ID, t.Subject)
-		title := n.labels[to] + ": " + t.Title
-		if t.Subject != "" {
-			title += ", " + t.Subject
-		}
+		title := n.labels[to] + ": " + digest.Titled(t.Title, t.Subject)
 		rest := 0
 		if t.Chapter != exhibit.Plan { // every box to fill in stands on paper
 			rest = max(len(t.Rows)-longTable, 0)

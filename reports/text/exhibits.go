@@ -17,7 +17,7 @@ func exhibits(w *writer, r *rules.Review) {
 	}
 	for _, t := range r.Tables {
 		w.blank()
-		w.wrap(titled(t.Title, t.Subject))
+		w.wrap(digest.Titled(t.Title, t.Subject))
 		newGrid(w, t).write()
 		w.remark(t.Note, t.Basis)
 	}
@@ -26,18 +26,11 @@ func exhibits(w *writer, r *rules.Review) {
 	}
 	w.head("Curves, drawn by --pdf and --html")
 	for _, c := range r.Curves {
-		w.hang("-", 2, titled(c.Title, c.Subject)+". "+digest.CurveWords(c)+" "+c.Note)
+		w.hang("-", 2, digest.Titled(c.Title, c.Subject)+". "+digest.CurveWords(c)+" "+c.Note)
 		if c.Basis != "" {
 			w.hang("  by", 5, c.Basis)
 		}
 	}
-}
-
-func titled(title, subject string) string {
-	if subject == "" {
-		return title
-	}
-	return title + ", " + subject
 }
 
 // remark is what stands under a table.

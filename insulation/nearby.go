@@ -17,9 +17,9 @@ type StrengthBounds struct {
 
 // BreakdownBounds bounds the breakdown of a gap. The lower bound is one of air and gases,
 // whose laws also hold left of the Paschen minimum, of boards, oil and solids, and of surfaces
-// in vacuum. The upper one
-// in other gases than air is that of plates, or that helium, argon, hydrogen and carbon
-// dioxide stand no more than air; in what is called vacuum and is none, that of the gas left.
+// in vacuum. The upper one in other gases than air is that of plates, or that helium, argon,
+// hydrogen and carbon dioxide stand no more than air; in what is called vacuum and is none,
+// that of the gas left.
 func BreakdownBounds(g gap.Gap, sharp gap.Polarity) StrengthBounds {
 	law := func(g gap.Gap) (gap.Answer[quantity.Voltage], error) { return Breakdown(g, sharp) }
 	b := StrengthBounds{Least: gap.ResultOf(narrower(g, law))}

@@ -23,8 +23,14 @@ func TestASpacingFromTheMainsNeedsNoHeaterFeed(t *testing.T) {
 	}
 }
 
-// mainsChain is a supply without a heater feed, and a spacing of the mains.
-const mainsChain = `
+// siteAlone is a site and a spacing of its mains, and nothing else; mainsChain has a supply
+// without a heater feed besides.
+const (
+	siteAlone  = atMains + mainsTerminal
+	mainsChain = atMains + oneStage + mainsTerminal
+)
+
+const atMains = `
 format = 1
 title  = "mains terminal"
 
@@ -35,7 +41,9 @@ pollution_degree     = 2
 mains                = "230 V"
 mains_frequency      = "50 Hz"
 overvoltage_category = 2
+`
 
+const oneStage = `
 [drive]
 waveform   = "sine"
 frequency  = "20 kHz"
@@ -54,7 +62,9 @@ diode               = { forward_drop = "1 V" }
 name    = "monitor"
 at      = "output"
 current = "10 uA"
+`
 
+const mainsTerminal = `
 [[spacing]]
 name       = "mains terminal"
 from       = "mains"
@@ -81,30 +91,6 @@ func asMains(t *testing.T, r *rules.Review) {
 		t.Error(f.Because)
 	}
 }
-
-// siteAlone is a site and one spacing, and nothing else.
-const siteAlone = `
-format = 1
-title  = "mains terminal"
-
-[site]
-altitude             = "0 m"
-air_temperature      = "25 degC"
-pollution_degree     = 2
-mains                = "230 V"
-mains_frequency      = "50 Hz"
-overvoltage_category = 2
-
-[[spacing]]
-name       = "mains terminal"
-from       = "mains"
-to         = "ground"
-medium     = "air"
-insulation = "basic"
-clearance  = "3 mm"
-creepage   = "5 mm"
-cti        = "200 V"
-`
 
 // A site and a spacing are a whole description, from the mains to ground as well.
 func TestASpacingFromTheMainsNeedsNoSupply(t *testing.T) {

@@ -8,6 +8,7 @@ import (
 	"kilovet/hv/lack"
 	"kilovet/hv/quantity"
 	"kilovet/insulation"
+	"kilovet/insulation/gap"
 	"kilovet/rules/evidence"
 	"kilovet/rules/limits"
 	"kilovet/rules/rule"
@@ -136,15 +137,21 @@ func judgeCorona(e *evidence.Evidence, s *chain.Spacing) (rule.Finding, string) 
 		}
 		onset.Answer = least
 	}
+	return againstOnset(e, f, s, x, onset.Answer), ""
+}
+
+// againstOnset judges the peak across a gap by where a discharge begins: at worst marginal,
+// and open where it passes what is only a lower bound.
+func againstOnset(e *evidence.Evidence, f rule.Finding, s *chain.Spacing, x evidence.Spacing, onset gap.Answer[quantity.Voltage]) rule.Finding {
 	f.Under = x.Under.Text()
-	f.Sources = append(append(rule.Cited(onset.Sources), coronaSource), shown(onset.Answer)...)
+	f.Sources = append(append(rule.Cited(onset.Sources), coronaSource), shown(onset)...)
 	expected := "where discharge is expected from"
 	if onset.AtLeast {
 		expected = "where no discharge is expected under"
 	}
 	f.Because = fmt.Sprintf("%s across a gap %s %s (%s)", quantity.Text(x.Voltages.Peak), expected, quantity.Text(onset.Value), onset.Because)
 	if onset.AtLeast && !quantity.AtMost(x.Voltages.Peak, onset.Value) {
-		return leftOpen(f, s, x, lack.Failed("only a lower bound of the onset is known")), ""
+		return leftOpen(f, s, x, lack.Failed("only a lower bound of the onset is known"))
 	}
 	f = f.Most(rule.Of(x.Voltages.Peak), rule.Of(onset.Value), limits.DistanceMargin).Assume(onset.Assumptions...).Assume(beyond(e, s, x)...)
 	if f.Verdict == rule.Fails {
@@ -157,7 +164,7 @@ func judgeCorona(e *evidence.Evidence, s *chain.Spacing) (rule.Finding, string) 
 	default:
 		f.Remedy = againstCorona(s, x)
 	}
-	return f, ""
+	return f
 }
 
 // noOnset is the finding where no law gives the onset.

@@ -7,6 +7,7 @@ import (
 	"kilovet/hv/lack"
 	"kilovet/hv/quantity"
 	"kilovet/insulation"
+	"kilovet/insulation/gap"
 	"kilovet/rules/evidence"
 	"kilovet/rules/limits"
 	"kilovet/rules/rule"
@@ -28,34 +29,12 @@ func unanswered(e *evidence.Evidence, f rule.Finding, s *chain.Spacing, x eviden
 	if x.Computed { // the line of a computed field has no other distance
 		return f.Lacking(why)
 	}
-	const least = "least"
 	b, v := x.BreakdownBounds(), x.Voltages.Peak
-	stands := func(at quantity.Voltage, how, because string, comfort float64) rule.Finding {
-		f.Under = x.Under.Text()
-		f.Because = fmt.Sprintf("%s across a gap that stands at %s %s (%s)", quantity.Text(v), how, quantity.Text(at), because)
-		f = shareOf(f, x)
-		if how == least { // an upper bound may not be used up
-			f = f.ShareBy(rule.Of(at), breakdownSource)
-		}
-		return f.Most(rule.Of(v), rule.Of(at*usable(x)), comfort)
-	}
 	switch {
 	case b.Least.Lack == nil && quantity.AtMost(v, b.Least.Value*usable(x)):
-		f.Sources = append(rule.Cited(b.Least.Sources), breakdownSource)
-		f = stands(b.Least.Value, least, b.Least.Because, limits.BreakdownShare/limits.BreakdownComfort-1).Assume(b.Least.Assumptions...)
-		if f.Verdict != rule.Meets {
-			f.Remedy = alternatives("lower the voltage", confirm)
-		}
-		return f
+		return underLeast(f, x, b.Least.Answer)
 	case b.Most.Lack == nil && !quantity.AtMost(v, b.Most.Value*usable(x)):
-		f.Sources = append(rule.Cited(b.Most.Sources), breakdownSource)
-		f = stands(b.Most.Value, "most", b.Most.Because, 0)
-		f.Remedy = alternatives(againstBreakdown(e, s, x), "take a stronger medium")
-		if noVacuum(s, x) {
-			f.Remedy = "pump lower before the voltage is switched on"
-			f = f.Assume("the gas left in the vessel is " + string(x.Gap.Filling()))
-		}
-		return f
+		return aboveMost(e, f, s, x, b.Most.Answer)
 	}
 	f.Because = within(v, b)
 	f = f.Lacking(why)
@@ -63,6 +42,36 @@ func unanswered(e *evidence.Evidence, f rule.Finding, s *chain.Spacing, x eviden
 		f.Remedy = measured(s, "at which voltage this gap breaks down", "keep the peak under 80 % of it")
 	}
 	return f
+}
+
+// underLeast is the finding where the peak stays under the lower bound.
+func underLeast(f rule.Finding, x evidence.Spacing, least gap.Answer[quantity.Voltage]) rule.Finding {
+	f = standsAt(f, x, "least", least).ShareBy(rule.Of(least.Value), breakdownSource)
+	f = f.Most(rule.Of(x.Voltages.Peak), rule.Of(least.Value*usable(x)), limits.BreakdownShare/limits.BreakdownComfort-1).Assume(least.Assumptions...)
+	if f.Verdict != rule.Meets {
+		f.Remedy = alternatives("lower the voltage", confirm)
+	}
+	return f
+}
+
+// aboveMost is the finding where the peak lies above the upper bound, of which no part may
+// be used up.
+func aboveMost(e *evidence.Evidence, f rule.Finding, s *chain.Spacing, x evidence.Spacing, most gap.Answer[quantity.Voltage]) rule.Finding {
+	f = standsAt(f, x, "most", most).Most(rule.Of(x.Voltages.Peak), rule.Of(most.Value*usable(x)), 0)
+	f.Remedy = alternatives(againstBreakdown(e, s, x), "take a stronger medium")
+	if noVacuum(s, x) {
+		f.Remedy = "pump lower before the voltage is switched on"
+		f = f.Assume("the gas left in the vessel is " + string(x.Gap.Filling()))
+	}
+	return f
+}
+
+// standsAt says what a gap stands at least or at most, and why.
+func standsAt(f rule.Finding, x evidence.Spacing, how string, at gap.Answer[quantity.Voltage]) rule.Finding {
+	f.Sources = append(rule.Cited(at.Sources), breakdownSource)
+	f.Under = x.Under.Text()
+	f.Because = fmt.Sprintf("%s across a gap that stands at %s %s (%s)", quantity.Text(x.Voltages.Peak), how, quantity.Text(at.Value), at.Because)
+	return shareOf(f, x)
 }
 
 // noVacuum reports whether a gap that is called vacuum has a pressure at which the laws of

@@ -180,6 +180,7 @@ func (r *reviewing) reviewOf(c *chain.Chain, given source) (*rules.Review, error
 
 // judged runs the rules; the faults are those of the local limits.
 func (r *reviewing) judged(c *chain.Chain, given source) (*rules.Review, document.Faults, error) {
+	makeRoom()
 	inputs, program := []rules.Input{inputOf("description", given)}, rules.Program{Name: "kilovet", Version: version()}
 	progress := r.progress()
 	defer progress.end()

@@ -1,0 +1,25 @@
+package main
+
+import (
+	"runtime/debug"
+	"sync"
+	"sync/atomic"
+)
+
+// A review is over before collecting what it left behind pays, and half of what it does
+// with memory is to touch it for the first time. So the heap is given a floor below which
+// nothing is collected, and room that the system may hand out in large pages.
+const (
+	heapFloor = 48 << 20  // bytes, addressed and never touched
+	heapRoom  = 128 << 20 // bytes, of which a review takes what it needs
+)
+
+// floor is what the collector takes for used memory.
+var floor atomic.Pointer[[heapFloor]byte]
+
+// makeRoom prepares the heap for a review, once in a process.
+var makeRoom = sync.OnceFunc(func() {
+	floor.Store(new([heapFloor]byte))
+	inLargePages(make([]byte, heapRoom))
+	debug.FreeOSMemory() // the room becomes free memory of the heap
+})

@@ -7,8 +7,6 @@ import (
 	"reflect"
 	"slices"
 	"strconv"
-
-	"kilovet/hv/quantity"
 )
 
 // SchemaHead is what a schema says of itself.
@@ -17,7 +15,8 @@ type SchemaHead struct{ ID, Title, Means string }
 // Schema writes the declarations of a struct as a JSON Schema (draft 2020-12), for
 // editors and other programs: keys, words, counts and the units of every quantity.
 // It refuses nothing that Read takes, but a number within a hair of its bound. What it
-// cannot say of a text, such as the range of a quantity, stands in the descriptions;
+// cannot say of a text, such as where the range of a quantity ends, stands in the
+// descriptions; its sign is part of the pattern;
 // checks across keys are not part of it.
 func Schema(w io.Writer, into any, head SchemaHead) error {
 	s := &schemer{kinds: map[string]reflect.Type{}}
@@ -127,7 +126,7 @@ func (s *schemer) kind(t reflect.Type) object {
 func (s *schemer) single(d Declared) object {
 	switch d.Holds {
 	case AQuantity:
-		return s.define(definitionName(d.Dimension), func() object { return quantitySchema(d.Dimension) })
+		return s.define(definitionName(d), func() object { return quantitySchema(d.Dimension, d.sign()) })
 	case AWhole:
 		return append(object{{"type", "integer"}}, d.bounds.schema()...)
 	case ANumber:
@@ -176,9 +175,10 @@ func (n *node) plain() any {
 	return n.value
 }
 
-// definitionName is the name of a dimension as a part of a reference.
-func definitionName(d *quantity.Dimension) string {
-	name := []byte(d.Name)
+// definitionName is the name of a quantity's dimension, and of its sign where the range
+// gives one, as a part of a reference.
+func definitionName(d Declared) string {
+	name := []byte([...]string{"", "not negative ", "positive "}[d.sign()] + d.Dimension.Name)
 	for i, c := range name {
 		if c == ' ' {
 			name[i] = '_'

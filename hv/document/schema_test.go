@@ -8,6 +8,7 @@ import (
 	"reflect"
 	"regexp"
 	"slices"
+	"strconv"
 	"strings"
 	"testing"
 
@@ -202,6 +203,32 @@ func TestSchemaKnowsRangesOfPureNumbers(t *testing.T) {
 		if (err == nil) != fine {
 			t.Errorf("%s: %v", text, err)
 		}
+	}
+}
+
+// The sign of a quantity is a part of its pattern: the schema refuses what is less than
+// nothing, and nothing, exactly where the reader does. Temperatures have no sign.
+func TestSchemaKnowsTheSignsOfQuantities(t *testing.T) {
+	schema, by := schemaOf(t, &chain.Chain{}), keysOf(&chain.Chain{})
+	refused := map[string]int{}
+	for _, d := range document.Describe(&chain.Chain{}) {
+		if d.Holds != document.AQuantity || d.List != "" || d.Dimension.Name == "temperature" {
+			continue
+		}
+		for _, number := range []string{"-1e-20", "0", "-0.0", "\u2212.0", "+00.0e5", "-.01e-18"} {
+			text := by.with(d.Path, strconv.Quote(number+" "+d.Dimension.Units()[0]))
+			faults := document.Read([]byte(text), &chain.Chain{})
+			got, want := judge(t, schema, text), slices.ContainsFunc(faults, func(f document.Fault) bool { return f.Code == document.Range })
+			if got != want {
+				t.Errorf("%s = %s: reader %v, schema refuses %t", d.Path, number, faults, got)
+			}
+			if got {
+				refused[number]++
+			}
+		}
+	}
+	if refused["-1e-20"] < 100 || refused["0"] < 80 || refused["0"] >= refused["-1e-20"] {
+		t.Errorf("refused: %v", refused)
 	}
 }
 

@@ -122,20 +122,26 @@ func (s *sheet) flagWidth(f pennant) float64 {
 	return s.wide(tag, f.text()) + 2*flagEdge
 }
 
-// flag draws a flag to the right of a place: filled for what fails, with a broken
-// outline for what is unassessed, with a plain one for what is marginal.
+// inset is how far the second outline of what is unassessed lies within the first.
+const inset = 0.5
+
+// flag draws a flag to the right of a place: filled for what fails, with a double outline
+// for what is unassessed, with a broken one for what is marginal, as the sheets mark them.
 func (s *sheet) flag(p at, f pennant) {
 	width := s.flagWidth(f)
-	corners := []at{p.plus(0, -flagHeight/2), p.plus(width, -flagHeight/2), p.plus(width, flagHeight/2), p.plus(0, flagHeight/2)}
+	corners := func(in float64) []at {
+		return []at{p.plus(in, in-flagHeight/2), p.plus(width-in, in-flagHeight/2), p.plus(width-in, flagHeight/2-in), p.plus(in, flagHeight/2-in)}
+	}
 	colour := ink
 	switch f.verdict {
 	case rule.Marginal:
-		s.outline(corners...)
+		s.fill(paper, corners(0)...)
+		s.stroke(lines(corners(0), true), 1.5*fine, []vg.Length{mm(0.9), mm(0.6)})
 	case rule.Unassessed:
-		s.fill(paper, corners...)
-		s.stroke(lines(corners, true), 1.5*fine, []vg.Length{mm(0.9), mm(0.6)})
+		s.outline(corners(0)...)
+		s.stroke(lines(corners(inset), true), fine/2, nil)
 	default:
-		s.fill(ink, corners...)
+		s.fill(ink, corners(0)...)
 		colour = paper
 	}
 	s.writeIn(colour, p.plus(flagEdge, 0), toRight, tag, f.text())

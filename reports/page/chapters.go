@@ -56,7 +56,7 @@ func flagsExplained(d *diagram.Diagram) string {
 	if len(d.Marks) == 0 {
 		return ""
 	}
-	return " Flags: black fails, broken outline unassessed, plain outline marginal; their numbers are explained below."
+	return " Flags: black fails, double outline unassessed, broken outline marginal; their numbers are explained below."
 }
 
 func (n *writer) markAnchor(m diagram.Mark) string {

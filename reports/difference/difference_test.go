@@ -36,6 +36,7 @@ func changed() *difference.Report {
 			Inputs: []compare.Input{
 				{Key: "drive.peak", At: "drive.peak", Old: `"1.75 kV"`, New: `"1750 V"`, Rewritten: true},
 				{Key: "spacing.creepage", At: `spacing "gun feedthrough, air side".creepage`, Old: `"150 mm"`, New: `"110 mm"`},
+				{Key: "part.name", At: `part "arc limiter".name`, Old: `"limiter"`, New: `"arc limiter"`, Renamed: true},
 				{Key: "access.waiting_time", At: "access.waiting_time", New: `"60 s"`},
 				{Key: "multiplier.coupling_capacitor.value", At: "multiplier.coupling_capacitor.value", Old: `["2.2 nF", "2.2 nF"]`},
 			},

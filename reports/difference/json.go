@@ -45,6 +45,7 @@ type (
 		Old       string `json:"old,omitempty"`
 		New       string `json:"new,omitempty"`
 		Rewritten bool   `json:"rewritten"`
+		Renamed   bool   `json:"renamed"`
 	}
 	number struct {
 		ID      string   `json:"id"`

@@ -36,7 +36,7 @@ func Text(r *Report, o Options) []byte {
 	w.Section("Changed inputs", len(r.Inputs))
 	for _, in := range r.Inputs {
 		w.Hang("", 0, in.At)
-		w.Hang("", 4, given(in.Old)+" → "+given(in.New)+rewritten(in))
+		w.Hang("", 4, given(in.Old)+" → "+given(in.New)+remark(in))
 	}
 	w.Section("Changed verdicts", len(r.Findings))
 	for _, e := range entries(r.Findings, o.All) {
@@ -90,9 +90,13 @@ func counted(n int, of1, ofMore string) []string {
 	return []string{fmt.Sprintf("%d findings %s", n, ofMore)}
 }
 
-func rewritten(in compare.Input) string {
-	if in.Rewritten {
+// remark says what a changed text leaves as it was.
+func remark(in compare.Input) string {
+	switch {
+	case in.Rewritten:
 		return " (the same value)"
+	case in.Renamed:
+		return " (renamed, the rest is the same)"
 	}
 	return ""
 }

@@ -34,6 +34,7 @@ type Input struct {
 	Key, At   string // without and with what tells tables of one kind apart
 	Old, New  string // as they stand in the files
 	Rewritten bool   // written differently, the same value
+	Renamed   bool   // the name of a table that holds what it held
 }
 
 // Figure is a figure that moved; Old or New is nil where it is not listed.
@@ -50,10 +51,13 @@ type Finding struct {
 	Worse         bool
 }
 
-// Of compares two sides.
+// Of compares two sides. A table that bears another name and holds the same is one
+// changed name, and what is said of it is compared with what was said under the old one.
 func Of(old, new Side) Difference {
+	renamed := renames(old.Inputs, new.Inputs)
+	old = old.under(renamed, leads(old.Inputs, new.Inputs, renamed))
 	d := Difference{Was: old.Verdict, Is: new.Verdict,
-		Inputs: inputs(old.Inputs, new.Inputs), Figures: figures(old.Figures, new.Figures), Findings: findings(old.Findings, new.Findings)}
+		Inputs: inputs(old.Inputs, new.Inputs, renamed), Figures: figures(old.Figures, new.Figures), Findings: findings(old.Findings, new.Findings)}
 	d.Worse = rule.Graver(d.Is, d.Was)
 	for _, f := range d.Findings {
 		d.Worse = d.Worse || f.Worse

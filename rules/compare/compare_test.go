@@ -27,11 +27,16 @@ func TestInputs(t *testing.T) {
 		{"added", "", "multiplier.stages = 6\n", `multiplier.stages  6 false`},
 		{"taken out", "multiplier.stages = 6\n", "", `multiplier.stages 6  false`},
 		{"moved", "[[spacing]]\nname = \"a\"\ncreepage = \"1 m\"\n[[spacing]]\nname = \"b\"\n", "[[spacing]]\nname = \"b\"\n[[spacing]]\nname = \"a\"\ncreepage = \"1 m\"\n", ""},
+		{"renamed", "[[spacing]]\nname = \"a\"\ncreepage = \"1 m\"\n[[spacing]]\nname = \"b\"\n", "[[spacing]]\nname = \"b\"\n[[spacing]]\nname = \"c\"\ncreepage = \"1 m\"\n", `spacing "c".name "a" "c" false renamed`},
+		{"renamed, with tables of its own", "[[field]]\nname = \"a\"\nmedium = \"air\"\n[[field.electrodes]]\nname = \"x\"\n", "[[field]]\nname = 'the.name'\nmedium = \"air\"\n[[field.electrodes]]\nname = \"x\"\n", `field "the.name".name "a" 'the.name' false renamed`},
+		{"renamed and changed", "[[part]]\nname = \"a\"\nvalue = 1\n", "[[part]]\nname = \"b\"\nvalue = 2\n", "part \"b\".name  \"b\" false\npart \"b\".value  2 false\npart \"a\".name \"a\"  false\npart \"a\".value 1  false"},
+		{"of another kind", "[[part]]\nname = \"a\"\nvalue = 1\n", "[[load]]\nname = \"b\"\nvalue = 1\n", "load \"b\".name  \"b\" false\nload \"b\".value  1 false\npart \"a\".name \"a\"  false\npart \"a\".value 1  false"},
+		{"two names changed places", "[[part]]\nname = \"a\"\nvalue = 1\n[[part]]\nname = \"b\"\nvalue = 2\n", "[[part]]\nname = \"b\"\nvalue = 1\n[[part]]\nname = \"a\"\nvalue = 2\n", "part \"b\".value 2 1 false\npart \"a\".value 1 2 false"},
 		{"one of several", "[[spacing]]\nname = \"a\"\ncreepage = \"1 m\"\n", "[[spacing]]\nname = \"a\"\ncreepage = \"2 m\"\n", `spacing "a".creepage "1 m" "2 m" false`},
 	} {
 		var lines []string
 		for _, in := range compare.Of(described(c.old), described(c.new)).Inputs {
-			lines = append(lines, strings.Join([]string{in.At, in.Old, in.New, map[bool]string{true: "true", false: "false"}[in.Rewritten]}, " "))
+			lines = append(lines, strings.Join([]string{in.At, in.Old, in.New, map[bool]string{true: "true", false: "false"}[in.Rewritten]}, " ")+map[bool]string{true: " renamed"}[in.Renamed])
 		}
 		if got := strings.Join(lines, "\n"); got != c.want {
 			t.Errorf("%s: got %q, want %q", c.name, got, c.want)
@@ -114,6 +119,28 @@ func TestWorse(t *testing.T) {
 // A subject that bears another name is judged as it was.
 func TestARenamedSubjectIsNotWorse(t *testing.T) {
 	if d := compare.Of(judged(rule.Fails, rule.Meets), judged(rule.Fails, "", rule.Meets)); len(d.Findings) != 2 || d.Worse {
+		t.Errorf("%+v", d)
+	}
+}
+
+// What is said of a table under its new name is compared with what was said under the old
+// one; where another bears either name, nobody can tell which is spoken of.
+func TestWhatIsSaidOfARenamedTable(t *testing.T) {
+	side := func(kind, name string, value float64, v rule.Verdict) compare.Side {
+		s := described("[[spacing]]\nname = \"" + name + "\"\ncreepage = 1\n" + kind)
+		s.Figures = []figure.Figure{{ID: "spacing.voltage", Subject: name, Value: value}, {ID: "field.peak", Subject: name + "/lid", Value: value}}
+		s.Findings = []rule.Finding{{Rule: "spacing.creepage", Subject: name, Verdict: v}}
+		return s
+	}
+	if d := compare.Of(side("", "a", 1, rule.Meets), side("", "b", 1, rule.Meets)); len(d.Inputs) != 1 || len(d.Figures)+len(d.Findings) != 0 {
+		t.Errorf("%+v", d)
+	}
+	d := compare.Of(side("", "a", 1, rule.Meets), side("", "b", 2, rule.Fails))
+	if len(d.Figures) != 2 || d.Figures[0].Subject != "b" || *d.Figures[1].Old != 1 || len(d.Findings) != 1 || d.Findings[0].Old == nil || !d.Worse {
+		t.Errorf("%+v", d)
+	}
+	other := "[[part]]\nname = \"a\"\nvalue = 7\n"
+	if d := compare.Of(side(other, "a", 1, rule.Meets), side(other, "b", 1, rule.Meets)); len(d.Inputs) != 1 || len(d.Figures) != 4 || len(d.Findings) != 2 {
 		t.Errorf("%+v", d)
 	}
 }

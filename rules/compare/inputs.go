@@ -1,6 +1,7 @@
 package compare
 
 import (
+	"slices"
 	"strconv"
 
 	"kilovet/hv/chain"
@@ -9,7 +10,7 @@ import (
 )
 
 // inputs lists the values that were changed, added or taken out.
-func inputs(old, new []document.Written) []Input {
+func inputs(old, new []document.Written, renamed []rename) []Input {
 	declared := map[string]document.Declared{}
 	for _, d := range document.Describe(&chain.Chain{}) {
 		declared[d.Path] = d
@@ -21,6 +22,7 @@ func inputs(old, new []document.Written) []Input {
 		if in.Old == in.New {
 			continue
 		}
+		in.Renamed = slices.ContainsFunc(renamed, func(r rename) bool { return in.At == r.new.at+".name" })
 		in.Rewritten = p.old != nil && p.new != nil && sameValue(declared[w.Key], in.Old, in.New)
 		changed = append(changed, in)
 	}

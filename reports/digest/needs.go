@@ -7,8 +7,12 @@ import (
 	"kilovet/rules/rule"
 )
 
-// Lacking names the keys that a finding lacks beside those that its remedy names already.
+// Lacking names the keys that a finding lacks beside those that its remedy names already;
+// none where its reason lists them.
 func Lacking(f rule.Finding) string {
+	if f.ListsMissing() {
+		return ""
+	}
 	var rest []string
 	for _, key := range f.Missing {
 		if !names(f.Remedy, key) {

@@ -29,3 +29,18 @@ func TestLackingIsWhatTheRemedyDoesNotName(t *testing.T) {
 		}
 	}
 }
+
+// What the reason lists is not listed again; a word of it is no list.
+func TestLackingIsNotToldTwice(t *testing.T) {
+	missing := []string{"site.altitude", "drive.peak"}
+	for because, want := range map[string]string{
+		"site.altitude, drive.peak not given":      "",
+		"7 s; site.altitude, drive.peak not given": "",
+		"site.altitude and drive.peak":             "site.altitude, drive.peak",
+		"site.altitude not given":                  "site.altitude, drive.peak",
+	} {
+		if got := digest.Lacking(rule.Finding{Because: because, Remedy: "give both of these", Missing: missing}); got != want {
+			t.Errorf("%q: %q, want %q", because, got, want)
+		}
+	}
+}

@@ -1,7 +1,9 @@
 package rule
 
 import (
+	"fmt"
 	"math"
+	"strings"
 
 	"kilovet/hv/lack"
 	"kilovet/hv/quantity"
@@ -92,19 +94,27 @@ func (f Finding) Lacking(err error) Finding {
 	if l := lack.Of(err); l != nil {
 		f.Missing = l.Keys
 	}
-	f.Remedy = remedy(f.Missing)
+	f.Remedy = f.giving()
 	return f
 }
 
-func remedy(missing []string) string {
-	if len(missing) == 0 {
+// giving is the remedy of a finding that lacks keys; several that the reason has just
+// listed are not listed again.
+func (f Finding) giving() string {
+	switch {
+	case len(f.Missing) == 0:
 		return "measure or calculate it by other means before switching on"
+	case len(f.Missing) == 2 && f.ListsMissing():
+		return "give both of these"
+	case len(f.Missing) > 2 && f.ListsMissing():
+		return fmt.Sprintf("give all %d of these", len(f.Missing))
 	}
-	text := "give " + missing[0]
-	for _, key := range missing[1:] {
-		text += ", " + key
-	}
-	return text
+	return "give " + strings.Join(f.Missing, ", ")
+}
+
+// ListsMissing reports whether the reason lists every missing key as not given.
+func (f Finding) ListsMissing() bool {
+	return len(f.Missing) > 0 && strings.Contains(f.Because, strings.Join(f.Missing, ", ")+" not given")
 }
 
 // Assume adds what was taken for granted; a pass becomes marginal.

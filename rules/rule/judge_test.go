@@ -75,6 +75,13 @@ func TestLackingKeepsTheSentenceAndNamesTheKey(t *testing.T) {
 	if f.Verdict != rule.Unassessed || f.Because != "7 s are needed; access.waiting_time not given" || f.Remedy != "give access.waiting_time" {
 		t.Errorf("%+v", f)
 	}
+	if f := (rule.Finding{}).Lacking(lack.Key("a", "b")); f.Because != "a, b not given" || f.Remedy != "give both of these" || len(f.Missing) != 2 {
+		t.Errorf("several keys: %+v", f)
+	}
+	several := &lack.Lack{Kind: lack.Missing, Keys: []string{"a", "b"}, Why: "neither is known"}
+	if f := (rule.Finding{}).Lacking(several); f.Remedy != "give a, b" {
+		t.Errorf("keys that the reason does not list: %+v", f)
+	}
 	if f := (rule.Finding{}).Lacking(errors.New("odd")); f.Verdict != rule.Unassessed || f.Remedy == "" {
 		t.Errorf("an error that is no lack: %+v", f)
 	}

@@ -2,6 +2,7 @@ package page
 
 import (
 	"slices"
+	"strings"
 	"unicode/utf8"
 
 	"kilovet/reports/digest"
@@ -9,10 +10,11 @@ import (
 )
 
 // want is how wide a column of a table is in runes: with its longest word or number
-// unbroken, and with its longest text on one line; and whether it holds numbers alone.
+// unbroken, with its longest text on one line, and with the longest that cannot be
+// broken between words; and whether it holds numbers, with short words at most.
 type want struct {
-	least, whole int
-	number       bool
+	least, whole, name int
+	number             bool
 }
 
 // Sizes of columns in runes.
@@ -34,7 +36,7 @@ func columns(t exhibit.Table) (all []Column, narrow bool) {
 	least, whole, folded := 0, 0, 0
 	for i := range t.Columns {
 		w := wanted(t, i)
-		least, whole, folded = least+w.least, whole+w.whole, folded+max(w.least, w.whole*85/100)
+		least, whole, folded = least+w.least, whole+w.whole, folded+max(w.least, w.whole*85/100, w.name)
 		wants[i] = w
 	}
 	line := lineRunes
@@ -78,10 +80,14 @@ func wanted(t exhibit.Table, i int) want {
 		if row[i].Value != nil || n <= shortWords {
 			w.least, w.whole = max(w.least, n), max(w.whole, n)
 		} else {
-			w.least, w.whole = max(w.least, longest(text)), max(w.whole, min(n*letter/digit, longestText))
+			line := min(n*letter/digit, longestText)
+			w.least, w.whole = max(w.least, longest(text)), max(w.whole, line)
+			if !strings.Contains(text, " ") {
+				w.name = max(w.name, line+2)
+			}
 		}
 	}
-	w.number = t.Columns[i].Unit != "" && !holdsWords(t, i)
+	w.number = t.Columns[i].Unit != "" && !holdsTexts(t, i)
 	w.least += 2 // and the space beside it
 	w.whole = max(w.whole+2, w.least)
 	return w
@@ -96,6 +102,9 @@ func longest(text string) int {
 	return n
 }
 
-func holdsWords(t exhibit.Table, i int) bool {
-	return slices.ContainsFunc(t.Rows, func(row []exhibit.Cell) bool { return row[i].Value == nil && row[i].Text != "" })
+// holdsTexts reports whether there is more than a short word beside numbers.
+func holdsTexts(t exhibit.Table, i int) bool {
+	return slices.ContainsFunc(t.Rows, func(row []exhibit.Cell) bool {
+		return row[i].Value == nil && utf8.RuneCountInString(row[i].Text) > shortWords
+	})
 }

@@ -82,13 +82,13 @@ func (l *legend) short(text string) string {
 }
 
 // withLegend is a table with letters for its long texts that come again, and what they
-// stand for.
+// stand for. The first column says what a row is about, and keeps its texts.
 func withLegend(t exhibit.Table) (exhibit.Table, []Line) {
 	words := make([][]string, len(t.Rows))
 	for i, row := range t.Rows {
 		words[i] = make([]string, len(row))
 		for j, c := range row {
-			if c.Value == nil {
+			if j > 0 && c.Value == nil {
 				words[i][j] = c.Text
 			}
 		}
@@ -101,7 +101,7 @@ func withLegend(t exhibit.Table) (exhibit.Table, []Line) {
 	for i, row := range t.Rows {
 		rows[i] = make([]exhibit.Cell, len(row))
 		for j, c := range row {
-			if c.Value == nil {
+			if j > 0 && c.Value == nil {
 				c.Text = l.short(c.Text)
 			}
 			rows[i][j] = c

@@ -10,6 +10,35 @@ import (
 	"github.com/spf13/pflag"
 )
 
+// helpCommand shows the help of a command, as its flag does.
+func helpCommand() *cobra.Command {
+	return &cobra.Command{
+		Use:     "help [COMMAND]",
+		Short:   "Show what a command does",
+		Example: "  kilovet help review",
+		RunE: func(c *cobra.Command, args []string) error {
+			about, rest, err := c.Root().Find(args)
+			switch {
+			case err != nil:
+				return err
+			case len(rest) > 0 && about == c.Root():
+				return noCommand(about, rest)
+			case len(rest) > 0:
+				return exitf(unusable, "%s has no commands of its own; kilovet help %s shows what it does", about.Name(), about.Name())
+			}
+			about.InitDefaultHelpFlag()
+			about.InitDefaultVersionFlag()
+			return about.Help()
+		},
+		ValidArgsFunction: func(c *cobra.Command, args []string, _ string) ([]string, cobra.ShellCompDirective) {
+			if len(args) > 0 {
+				return nil, cobra.ShellCompDirectiveNoFileComp
+			}
+			return names(c.Root()), cobra.ShellCompDirectiveNoFileComp
+		},
+	}
+}
+
 // help writes what a command does, examples before everything else, into the width of
 // the terminal.
 func (w world) help(c *cobra.Command) {

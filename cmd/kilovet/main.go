@@ -45,7 +45,7 @@ func columns(out *os.File) int {
 		return 0
 	}
 	width, _, err := term.GetSize(int(out.Fd()))
-	if err != nil {
+	if err != nil || width <= 0 { // some lines do not say how wide they are
 		return 80
 	}
 	return width
@@ -116,7 +116,9 @@ func root(w world) *cobra.Command {
 	command.SetIn(w.in)
 	command.SetOut(w.out)
 	command.SetErr(w.err)
-	command.AddCommand(reviewCommand(w), basisCommand(w), draftCommand(w), schemaCommand(w), compareCommand(w), showCommand(w), spacingCommand(w), planCommand(w), readingsCommand(w), manualCommand(w), signoffCommand(w), verifyCommand(w))
+	command.CompletionOptions.DisableDefaultCmd = true
+	command.SetHelpCommand(helpCommand())
+	command.AddCommand(reviewCommand(w), basisCommand(w), completionCommand(w), draftCommand(w), schemaCommand(w), compareCommand(w), showCommand(w), spacingCommand(w), planCommand(w), readingsCommand(w), manualCommand(w), signoffCommand(w), verifyCommand(w))
 	command.SetHelpFunc(func(c *cobra.Command, _ []string) { w.help(c) })
 	plainly(command)
 	return command

@@ -34,15 +34,15 @@ func replaceAll(outputs []output) error {
 	return nil
 }
 
-// kind is what an output is, and how files of it begin.
-type kind struct{ name, begins string }
+// kind is what an output is, how files of it begin, and what they hold further on.
+type kind struct{ name, begins, holds string }
 
-// The kinds of output.
+// The kinds of output. A PDF names its maker in UTF-16.
 var (
-	sheets  = kind{"PDF", "%PDF-"}
-	results = kind{"JSON of kilovet", `{"contract":`}
-	manuals = kind{"manual page of kilovet", manualBegins}
-	pages   = kind{"page of kilovet", "<!DOCTYPE html>\n<html lang=\"en\" data-made-by=\"kilovet\">"}
+	sheets  = kind{"PDF of kilovet", "%PDF-", "/Creator (\xfe\xff\x00k\x00i\x00l\x00o\x00v\x00e\x00t\x00 "}
+	results = kind{"JSON of kilovet", `{"contract":`, ""}
+	manuals = kind{"manual page of kilovet", manualBegins, ""}
+	pages   = kind{"page of kilovet", "<!DOCTYPE html>\n<html lang=\"en\" data-made-by=\"kilovet\">", ""}
 )
 
 func kindOf(data []byte) kind {
@@ -70,11 +70,20 @@ func spares(path string, k kind) error {
 		return exitf(files, "%s cannot be read, and what it holds is not replaced unseen: %v", path, plain(err))
 	}
 	defer file.Close()
-	begin := make([]byte, len(k.begins))
-	if _, err := io.ReadFull(file, begin); err != nil || string(begin) != k.begins {
+	if !k.made(file) {
 		return exitf(unusable, "%s exists and is no %s: it is not replaced; give another name, or remove it first", path, k.name)
 	}
 	return nil
+}
+
+// made reports whether a file is of the kind.
+func (k kind) made(file io.Reader) bool {
+	begin := make([]byte, len(k.begins))
+	if _, err := io.ReadFull(file, begin); err != nil || string(begin) != k.begins {
+		return false
+	}
+	rest, err := io.ReadAll(file)
+	return err == nil && bytes.Contains(rest, []byte(k.holds))
 }
 
 func written(outputs []output) string {

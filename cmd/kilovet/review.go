@@ -133,6 +133,9 @@ func (r *reviewing) input(args []string) (source, error) {
 	if args[0] == "-" {
 		return readAll("standard input", r.in)
 	}
+	if args[0] == "" {
+		return source{}, exitf(unusable, "a file was named by an empty text; name the description, or - for standard input")
+	}
 	file, err := os.Open(args[0])
 	if err != nil {
 		return source{}, exitf(files, "%s cannot be read: %v", args[0], plain(err))

@@ -20,16 +20,20 @@ func plainly(root *cobra.Command) {
 			if accepts == nil || accepts(c, given) == nil {
 				return nil
 			}
-			return exitf(unusable, "%s; the command is: kilovet %s", counted(given), c.Use)
+			return exitf(unusable, "%s; the command is: kilovet %s", counted(given, accepts(c, nil) == nil), c.Use)
 		}
 	}
 }
 
-func counted(given []string) string {
-	switch len(given) {
-	case 0:
+// counted says what is wrong with the number of names that a command was given, which it
+// may do without.
+func counted(given []string, none bool) string {
+	switch {
+	case len(given) == 0:
 		return "nothing was named"
-	case 1:
+	case len(given) == 1 && none:
+		return given[0] + " is too many"
+	case len(given) == 1:
 		return "only " + given[0] + " was named"
 	}
 	return strings.Join(given, " ") + " are too many"
@@ -44,14 +48,22 @@ func noCommand(root *cobra.Command, given []string) error {
 	if strings.HasSuffix(strings.ToLower(word), ".toml") {
 		return exitf(unusable, "no command %q; to review the file: kilovet review %s", word, word)
 	}
-	var names []string
-	for _, c := range root.Commands() {
-		names = append(names, c.Name())
+	if word == "version" {
+		return exitf(unusable, "no command %q; the version is told by kilovet --version", word)
 	}
-	if near, ok := document.Nearest(word, names); ok {
+	if near, ok := document.Nearest(word, names(root)); ok {
 		return exitf(unusable, "no command %q; did you mean %s?", word, near)
 	}
 	return exitf(unusable, "no command %q; kilovet --help lists them", word)
+}
+
+// names are those of the commands that a command has.
+func names(of *cobra.Command) []string {
+	var all []string
+	for _, c := range of.Commands() {
+		all = append(all, c.Name())
+	}
+	return all
 }
 
 // flagFault answers a flag that is not there or lacks its value. The library tells

@@ -55,16 +55,18 @@ type pace struct {
 func (r *rundown) run(p pace, see func(t float64)) error {
 	r.jump()
 	see(0)
-	for t, h := 0.0, firstStep; t < horizon && r.most > p.done; {
+	for t, h, longer := 0.0, firstStep, float64(growth); t < horizon && r.most > p.done; {
 		strain := r.step(h, p)
 		if strain > 1 && h > firstStep/growth {
-			h *= math.Max(0.2, 0.9/math.Cbrt(strain))
+			h *= math.Max(0.2, 0.8/math.Cbrt(strain))
+			longer = 1 // what refused this step refuses the next long one as well
 			continue
 		}
 		t += h
 		r.accept(h)
 		see(t)
-		h *= math.Min(growth, 0.9/math.Cbrt(math.Max(strain, 1e-3)))
+		h *= math.Min(longer, 0.9/math.Cbrt(math.Max(strain, 1e-3)))
+		longer = growth
 	}
 	if r.lost {
 		return lack.Failed("the diodes do not settle while the chain runs down")

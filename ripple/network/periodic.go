@@ -67,21 +67,23 @@ func (p *Periodic) spanOf(e *circuit.Element) span {
 
 // startFrom corrects the guess by as much as the guess for a similar circuit had to
 // be corrected, capacitor by capacitor: that changes little where the drive, a load
-// or a value does.
+// or a value does. What was corrected is taken as a charge, since that is what loads take
+// from a capacitor, and in proportion to the drive, with which most loads go.
 func (s *shooter) startFrom(p *Periodic) {
 	correction := map[string]float64{}
 	t := p.track
 	for i := range t.capacitors {
 		c := &t.capacitors[i]
 		reached := c.volts(t.potentials(0, 3), t.steps[0].sign, t.steps[0].sine[3])
-		correction[t.c.Elements[c.element].Name] = reached - p.guess[i]
+		correction[t.c.Elements[c.element].Name] = c.value * (reached - p.guess[i])
 	}
+	drive := s.scale / t.scale
 	for k := range s.q {
 		s.q[k] = 0
 	}
 	for i, v := range s.guessed() {
 		c := &s.capacitors[i]
-		c.inject(s.q, c.value*(v+correction[s.c.Elements[c.element].Name]))
+		c.inject(s.q, c.value*v+drive*correction[s.c.Elements[c.element].Name])
 	}
 	s.pack(s.q, s.amps, s.root, s.x)
 }

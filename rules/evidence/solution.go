@@ -24,16 +24,20 @@ func (e *Evidence) solution() (periodic, error) {
 		if err != nil {
 			return periodic{}, err
 		}
+		from := e.alike()
+		swift := from != nil
 		if e.holds() {
-			if t, err := e.trial(); err == nil && t.peak <= e.chain.Drive.Peak.V {
-				return periodic{t.state}, nil
+			if t, err := e.trial(); err == nil {
+				if t.peak <= e.chain.Drive.Peak.V {
+					return periodic{t.state}, nil
+				}
+				from = t.state // of this circuit at more drive than there is
 			}
 		}
 		if same, ok := e.unchanged(); ok {
 			return same, nil
 		}
-		from := e.alike()
-		return e.solve(c, from, from != nil)
+		return e.solve(c, from, swift)
 	})
 }
 

@@ -1,6 +1,9 @@
 package rules
 
 import (
+	"slices"
+
+	"kilovet/hv/parallel"
 	"kilovet/hv/quantity"
 	"kilovet/hv/touch"
 	"kilovet/rules/evidence"
@@ -29,23 +32,25 @@ func nodeEnergy(e *evidence.Evidence) []exhibit.Table {
 			{Head: "current through 2 kΩ", Unit: "A"}, {Head: "to 60 V", Unit: "s"}, {Head: "to 60 V, drive unplugged", Unit: "s"}},
 		Note: under(e) + "Charge and energy are what an ideal short delivers, drive and loads off; the times count what is permanent alone. A meter at the divider shows the sensed node only. The mains is that of its live conductor, peak: only its plug ends it.",
 	}
-	for _, node := range e.Nodes() {
-		r, err := e.Reachable(node)
-		if err != nil {
-			continue
-		}
-		i, errI := e.Available(node)
-		if e.OnMains(node) {
-			t.Rows = append(t.Rows, []exhibit.Cell{exhibit.Words(node), exhibit.Number(r.Voltage), exhibit.Words("without end"), exhibit.Words("without end"),
-				exhibit.OrWords(i, errI), exhibit.Words("never by itself"), exhibit.Words("stays live")})
-			continue
-		}
-		d, errD := e.DischargeOf(node)
-		u, errU := e.Unplugged(node)
-		t.Rows = append(t.Rows, []exhibit.Cell{exhibit.Words(node), exhibit.Number(r.Voltage), exhibit.Number(r.Short.Charge), exhibit.Number(r.Short.Energy),
-			exhibit.OrWords(i, errI), lasting(d, errD), lasting(u, errU)})
-	}
+	t.Rows = byNode(e.Nodes(), func(node string) []exhibit.Cell { return held(e, node) })
 	return table(t)
+}
+
+// held is what one node holds; nil where that is not known.
+func held(e *evidence.Evidence, node string) []exhibit.Cell {
+	r, err := e.Reachable(node)
+	if err != nil {
+		return nil
+	}
+	i, errI := e.Available(node)
+	if e.OnMains(node) {
+		return []exhibit.Cell{exhibit.Words(node), exhibit.Number(r.Voltage), exhibit.Words("without end"), exhibit.Words("without end"),
+			exhibit.OrWords(i, errI), exhibit.Words("never by itself"), exhibit.Words("stays live")}
+	}
+	d, errD := e.DischargeOf(node)
+	u, errU := e.Unplugged(node)
+	return []exhibit.Cell{exhibit.Words(node), exhibit.Number(r.Voltage), exhibit.Number(r.Short.Charge), exhibit.Number(r.Short.Energy),
+		exhibit.OrWords(i, errI), lasting(d, errD), lasting(u, errU)}
 }
 
 // lasting is a time, or what stays.
@@ -162,14 +167,22 @@ func rodTable(e *evidence.Evidence) []exhibit.Table {
 		Columns: []exhibit.Column{{Head: "node"}, {Head: "voltage", Unit: "V"}, {Head: "peak current", Unit: "A"}, {Head: "node to 60 V", Unit: "s"}, {Head: "all to 60 V", Unit: "s"}, {Head: "energy", Unit: "J"}},
 		Note:    under(e) + "All to 60 V is the time after which no node comes back when the rod is lifted, absorption apart. Touch every node in turn, from the earthy end to the hot end, then clip each; leave the earth on. Never the mains: it is unplugged.",
 	}
-	for _, node := range e.Discharged() { // a rod ends no mains
+	t.Rows = byNode(e.Discharged(), func(node string) []exhibit.Cell { // a rod ends no mains
 		r, err := e.Reachable(node)
 		x, err2 := e.Rod(node)
-		if first(err, err2) == nil {
-			t.Rows = append(t.Rows, []exhibit.Cell{exhibit.Words(node), exhibit.Number(r.Voltage), exhibit.Number(x.Peak), lasting(x.Node, nil), lasting(x.Whole, nil), exhibit.Number(x.Energy)})
+		if first(err, err2) != nil {
+			return nil
 		}
-	}
+		return []exhibit.Cell{exhibit.Words(node), exhibit.Number(r.Voltage), exhibit.Number(x.Peak), lasting(x.Node, nil), lasting(x.Whole, nil), exhibit.Number(x.Energy)}
+	})
 	return table(t)
+}
+
+// byNode gives each node its row, in order; none where there is nothing to show.
+func byNode(nodes []string, row func(node string) []exhibit.Cell) [][]exhibit.Cell {
+	all := make([][]exhibit.Cell, len(nodes))
+	parallel.Each(len(nodes), func(i int) { all[i] = row(nodes[i]) })
+	return slices.DeleteFunc(all, func(r []exhibit.Cell) bool { return r == nil })
 }
 
 // bodyTable shows what a body would take at the node that holds most: information.

@@ -6,6 +6,7 @@ import (
 
 	"kilovet/hv/chain"
 	"kilovet/hv/lack"
+	"kilovet/hv/parallel"
 	"kilovet/hv/quantity"
 )
 
@@ -55,10 +56,9 @@ func (e *Evidence) Remedies() ([]Remedy, error) {
 		if err != nil {
 			return nil, err
 		}
-		var all []Remedy
-		for _, k := range e.knobs() {
-			all = append(all, e.turn(k, start))
-		}
+		knobs := e.knobs()
+		all := make([]Remedy, len(knobs))
+		parallel.Each(len(knobs), func(i int) { all[i] = e.turn(knobs[i], start) })
 		return all, nil
 	})
 }

@@ -3,6 +3,7 @@ package plan
 import (
 	"fmt"
 
+	"kilovet/hv/parallel"
 	"kilovet/hv/quantity"
 	"kilovet/rules/evidence"
 )
@@ -22,43 +23,60 @@ var (
 	full  = level{1, 1800, ""}
 )
 
-// steps plans the levels of the drive, the gun apart first.
-func (m *maker) steps() {
+// staged is a step to plan.
+type staged struct {
+	gun   Gun
+	state evidence.State
+	level
+}
+
+// staircase lists the steps: the levels of the drive, the gun apart first.
+func (m *maker) staircase() []staged {
 	alone := None
 	if m.e.Chain().Gun.IsFitted() {
 		alone = Apart
 	}
-	m.step(alone, evidence.Cold, first)
+	all := []staged{{alone, evidence.Cold, first}}
 	for _, l := range climb {
-		m.step(alone, evidence.Cold, l)
+		all = append(all, staged{alone, evidence.Cold, l})
 	}
 	if alone == None {
-		return
+		return all
 	}
 	for _, l := range again {
-		m.step(Still, evidence.Cold, l)
+		all = append(all, staged{Still, evidence.Cold, l})
 	}
-	m.step(Lit, evidence.Working, full)
+	return append(all, staged{Lit, evidence.Working, full})
 }
 
-// step plans one level; what cannot be computed is left open, with the reason.
-func (m *maker) step(g Gun, state evidence.State, l level) {
-	s := Step{Name: nameOf(g, l), Gun: g, Share: l.share, Dwell: l.dwell, First: m.readying(g, l)}
-	if l.word != "" {
+// steps plans every level; what cannot be computed is left open, with the reason.
+func (m *maker) steps() {
+	list := m.staircase()
+	steps, errs := make([]Step, len(list)), make([]error, len(list))
+	parallel.Each(len(list), func(i int) { steps[i], errs[i] = m.step(list[i]) })
+	for i, s := range steps {
+		s.First = m.readying(s.Gun, list[i].level)
+		if errs[i] != nil {
+			m.open(s.Name, errs[i])
+			continue
+		}
+		m.plan.Steps = append(m.plan.Steps, s)
+	}
+}
+
+// step plans one level, but for what is done before it.
+func (m *maker) step(g staged) (Step, error) {
+	s := Step{Name: nameOf(g.gun, g.level), Gun: g.gun, Share: g.share, Dwell: g.dwell}
+	if g.word != "" {
 		s.Polarity = m.plan.Polarity
 	}
-	top, err := m.e.In(state).Peak()
+	top, err := m.e.In(g.state).Peak()
 	if err != nil {
-		m.open(s.Name, err)
-		return
+		return s, err
 	}
-	s.Peak = top * quantity.Voltage(l.share)
-	s.Condition = evidence.Condition{State: state, Peak: s.Peak, Fault: m.bench}
-	if err := m.fill(&s); err != nil {
-		m.open(s.Name, err)
-		return
-	}
-	m.plan.Steps = append(m.plan.Steps, s)
+	s.Peak = top * quantity.Voltage(g.share)
+	s.Condition = evidence.Condition{State: g.state, Peak: s.Peak, Fault: m.bench}
+	return s, m.fill(&s)
 }
 
 // fill computes what a step brings about.

@@ -128,11 +128,7 @@ func (r *rise) stair(part float64) (*envelope, error) {
 // look walks the period at the present state and reports whether the node comes up
 // in it.
 func (r *rise) look(e *envelope) (bool, error) {
-	g := rough
-	if e.leap <= 2 {
-		g = fine
-	}
-	if err := e.here(g); err != nil {
+	if err := e.here(rough); err != nil {
 		return false, err
 	}
 	s, node := e.frame, r.options.Node

@@ -3,6 +3,7 @@ package rules_test
 import (
 	"fmt"
 	"math"
+	"slices"
 	"strings"
 	"testing"
 
@@ -94,5 +95,26 @@ func TestFieldsInOtherMedia(t *testing.T) {
 		case c.line != "" && (len(curves[0].Lines) != 2 || !strings.Contains(curves[0].Lines[1].Name, c.line) || len(curves[0].Levels) > 0):
 			t.Errorf("%s: %v; %s", c.more, curves[0].Lines[len(curves[0].Lines)-1].Name, curves[0].Note)
 		}
+	}
+}
+
+// Of many paths the nearest to the curve are marked, the longest path of the vessel among
+// them, and how many are not is said.
+func TestFewOfManyPathsAreMarked(t *testing.T) {
+	text := string(described(t, "column"))
+	for i := range 40 {
+		text += fmt.Sprintf("\n[[spacing]]\nname = \"gap %d\"\nvoltage = \"3 kV\"\nmedium = \"air\"\nclearance = \"%d mm\"\n", i, 2+i)
+	}
+	c := reviewed(t, []byte(text)).Curves
+	at := slices.IndexFunc(c, func(c exhibit.Curve) bool { return c.ID == "vacuum.paschen" })
+	if at < 0 {
+		t.Fatal("no curve")
+	}
+	var names []string
+	for _, m := range c[at].Marks {
+		names = append(names, m.Name)
+	}
+	if len(names) != 12 || names[0] != "longest path at its permit" || !slices.Contains(names, "gap 0") || slices.Contains(names, "gap 39") || !strings.HasSuffix(c[at].Note, "Of the paths the 12 nearest to the curve are marked, 37 more are not.") {
+		t.Errorf("%v; %s", names, c[at].Note)
 	}
 }

@@ -1,6 +1,10 @@
 package rules
 
 import (
+	"cmp"
+	"fmt"
+	"slices"
+
 	"kilovet/hv/quantity"
 	"kilovet/insulation/vacuum"
 	"kilovet/rules/evidence"
@@ -32,10 +36,34 @@ func paschen(e *evidence.Evidence) []exhibit.Curve {
 	taken := exhibit.Line{Name: "taken left of the lowest", Points: []exhibit.Point{
 		{X: float64(vacuum.Free), Y: float64(p.Lowest.Voltage)}, {X: float64(p.Lowest.Product), Y: float64(p.Lowest.Voltage)}}}
 	c.Lines = []exhibit.Line{line, taken}
-	for _, m := range p.Paths {
+	shown := nearestPaths(p.Paths)
+	if rest := len(p.Paths) - len(shown); rest > 0 {
+		c.Note += fmt.Sprintf(" Of the paths the %d nearest to the curve are marked, %d more are not.", len(shown), rest)
+	}
+	for _, m := range shown {
 		c.Marks = append(c.Marks, exhibit.Mark{Name: m.Name, Point: exhibit.Point{X: float64(m.Product), Y: float64(m.Voltage)}})
 	}
 	return []exhibit.Curve{c}
+}
+
+// mostPaths is how many paths a curve can name before nothing of it can be read.
+const mostPaths = 12
+
+// nearestPaths are those nearest to the curve, or above it, in the order of the chain.
+func nearestPaths(all []evidence.PaschenPoint) []evidence.PaschenPoint {
+	if len(all) <= mostPaths {
+		return all
+	}
+	ranked := slices.Clone(all)
+	slices.SortStableFunc(ranked, func(a, b evidence.PaschenPoint) int { return cmp.Compare(b.Share, a.Share) })
+	least := ranked[mostPaths-1].Share
+	var near []evidence.PaschenPoint
+	for _, q := range all {
+		if q.Share >= least && len(near) < mostPaths {
+			near = append(near, q)
+		}
+	}
+	return near
 }
 
 // pumpDown shows the pressures that matter while the vessel is pumped, in its gas and in

@@ -48,13 +48,24 @@ func sayTheSame(a, b rule.Finding) bool {
 }
 
 // subjects says of what findings that are alike speak: of one beside its rule, of many
-// with the reason, where there is room.
-func subjects(c []rule.Finding) (beside, below Line) {
+// with the reason, where there is room. Each of many leads to what it rests on alone.
+func (n *writer) subjects(in digest.Chapter, c []rule.Finding) (beside, below Line) {
 	if len(c) == 1 {
 		return plain(c[0].Subject), Line{}
 	}
-	for _, f := range c {
-		below = joined(below, small(f.Subject))
+	for i, f := range c {
+		l := small(f.Subject)
+		for _, p := range n.pointers(in, f) {
+			if !n.shared(in, p, c) {
+				word := f.Subject
+				if i+1 < len(c) {
+					word += ";" // lest it be found in the name of another
+				}
+				l.Links = []Link{{word, p.to}}
+				break
+			}
+		}
+		below = joined(below, l)
 	}
-	return plain(fmt.Sprintf("%d of the same, named with the reason", len(c))), Line{Text: "Of: " + below.Text, Weight: Small}
+	return plain(fmt.Sprintf("%d of the same, named with the reason", len(c))), Line{Text: "Of: " + below.Text, Weight: Small, Links: below.Links}
 }

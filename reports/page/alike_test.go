@@ -7,6 +7,7 @@ import (
 
 	"kilovet/reports/internal/sample"
 	"kilovet/reports/page"
+	"kilovet/rules/figure"
 	"kilovet/rules/rule"
 )
 
@@ -48,5 +49,24 @@ func TestAFewFindingsHaveARowEach(t *testing.T) {
 		if got := strings.Count(body, "its consequences are not known"); got != c.count {
 			t.Errorf("%d findings that are %s: the reason stands %d times", c.count, c.verdict, got)
 		}
+	}
+}
+
+// Each of several leads to the figures that are its own; what all rest on stands once.
+func TestEachOfSeveralLeadsToItsOwnFigures(t *testing.T) {
+	r := sample.Sound()
+	r.Findings = nil
+	for _, name := range []string{"lid", "wall", "lid of the wall"} {
+		r.Findings = append(r.Findings, rule.Finding{Rule: "spacing.onset", Subject: name, Verdict: rule.Unassessed, Concern: rule.Performance, Because: "its shape is not known"})
+		r.Figures = append(r.Figures, figure.Figure{ID: "spacing.onset_estimate", Subject: name, What: "onset", Unit: "V", Value: float64(len(name))})
+	}
+	text := outline(page.New(r))
+	for _, want := range []string{"{lid; figures spacing.onset_estimate lid}", "{wall; figures spacing.onset_estimate wall}", "{lid of the wall figures spacing.onset_estimate lid of the wall}"} {
+		if !strings.Contains(text, want) {
+			t.Errorf("%q is missing in\n%s", want, text)
+		}
+	}
+	if strings.Contains(text, "see spacing.onset_estimate") {
+		t.Errorf("what one rests on is told of all:\n%s", text)
 	}
 }

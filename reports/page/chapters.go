@@ -133,7 +133,7 @@ func (n *writer) standing(c digest.Chapter, findings []rule.Finding) []Block {
 	t := Table{Title: "Findings", Columns: []Column{{Title: "Verdict", Share: 0.125}, {Title: "Rule and subject", Share: 0.215}, {Title: "Amounts", Share: 0.16}, {Title: "Reason and remedy", Share: 0.5}}}
 	for _, same := range clusters(findings) {
 		f := same[0]
-		about, all := subjects(same)
+		about, all := n.subjects(c, same)
 		needed, provided := digest.Labels(f)
 		beside, below := labelledSmall("under", f.Under), Line{}
 		if long(f.Under) {
@@ -143,19 +143,20 @@ func (n *writer) standing(c digest.Chapter, findings []rule.Finding) []Block {
 			{Verdict: f.Verdict},
 			lines(strong(f.Rule), about, small("concerns "+string(f.Concern)), small(digest.Line(f))),
 			lines(labelled(needed, digest.Needed(f)), labelled(provided, digest.Provided(f)), labelled("margin", digest.Margin(f)), beside),
-			n.reasons(c, f, all, below),
+			n.reasons(c, same, all, below),
 		}})
 	}
 	return []Block{t}
 }
 
-// reasons is why a finding is as it is, with what it rests on after what else is to say.
-func (n *writer) reasons(c digest.Chapter, f rule.Finding, subjects, below Line) Cell {
+// reasons is why findings that say the same are as they are, with what it rests on after what else is to say.
+func (n *writer) reasons(c digest.Chapter, same []rule.Finding, subjects, below Line) Cell {
+	f := same[0]
 	all := []Line{plain(f.Because), joined(labelled("Remedy:", f.Remedy), labelled("missing:", digest.Lacking(f)))}
 	for _, a := range f.Assumptions {
 		all = append(all, labelled("Assumed:", a))
 	}
-	return lines(append(all, subjects, joined(below, joined(n.sourceLine(f), n.seenLine(c, f))))...)
+	return lines(append(all, subjects, joined(below, joined(n.sourceLine(f), n.seenLine(c, same...))))...)
 }
 
 // longTable is how many rows of a table stand on the sheets; tables put first what

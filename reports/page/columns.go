@@ -21,7 +21,7 @@ type want struct {
 const (
 	longestWord = 16
 	longestText = 60
-	shortWords  = 9   // are not broken
+	shortWords  = 11  // are not broken
 	lineRunes   = 112 // of a whole line of a sheet
 	halfRunes   = 54  // of a line of half the width
 

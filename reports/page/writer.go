@@ -143,24 +143,43 @@ func (n *writer) sourceLine(f rule.Finding) Line {
 // rule does not say what its findings rest on.
 const mostSeen = 2
 
-// seenLine refers to what a finding rests on.
-func (n *writer) seenLine(c digest.Chapter, f rule.Finding) Line {
+// pointer is a word that leads somewhere.
+type pointer struct{ word, to string }
+
+// seenLine refers to what findings rest on, as far as they share it.
+func (n *writer) seenLine(c digest.Chapter, same ...rule.Finding) Line {
 	l := small("")
-	see := func(word, to string) {
-		if to != "" && !slices.ContainsFunc(l.Links, func(k Link) bool { return k.To == to }) {
-			l = joinedBy(", ", l, Line{Text: word, Links: []Link{{word[strings.LastIndex(word, " ")+1:], to}}})
+	for _, p := range n.pointers(c, same[0]) {
+		if n.shared(c, p, same[1:]) {
+			l = joinedBy(", ", l, Line{Text: p.word, Links: []Link{{p.word[strings.LastIndex(p.word, " ")+1:], p.to}}})
 		}
-	}
-	for _, ref := range digest.Rests(f.Rule, f.Subject) {
-		see(n.rest(ref))
-	}
-	if l.Text == "" {
-		n.seen(c, f, see)
 	}
 	if l.Text != "" {
 		l.Text, l.Weight = "see "+l.Text, Small
 	}
 	return l
+}
+
+// shared reports whether other findings rest on what is pointed at too.
+func (n *writer) shared(c digest.Chapter, p pointer, others []rule.Finding) bool {
+	return !slices.ContainsFunc(others, func(f rule.Finding) bool { return !slices.Contains(n.pointers(c, f), p) })
+}
+
+// pointers lead to what a finding rests on, each place once.
+func (n *writer) pointers(c digest.Chapter, f rule.Finding) []pointer {
+	var all []pointer
+	see := func(word, to string) {
+		if to != "" && !slices.ContainsFunc(all, func(p pointer) bool { return p.to == to }) {
+			all = append(all, pointer{word, to})
+		}
+	}
+	for _, ref := range digest.Rests(f.Rule, f.Subject) {
+		see(n.rest(ref))
+	}
+	if len(all) == 0 {
+		n.seen(c, f, see)
+	}
+	return all
 }
 
 // rest is what a rule rests on, and where it stands; nowhere where there is none.

@@ -64,7 +64,8 @@ func (w *flow) row(r row) {
 // on top.
 func (w *flow) begin(r row, height float64) {
 	if w.y+height > w.bottom && !w.fresh() {
-		w.room(height)
+		w.turn()
+		w.room(height + headHeight) // waiting figures may have left less than a head and a row
 		r.repeat()
 	}
 }

@@ -2,6 +2,7 @@ package pdf
 
 import (
 	"fmt"
+	"math"
 	"slices"
 	"testing"
 
@@ -33,6 +34,11 @@ func TestFiguresThatWaitStandClear(t *testing.T) {
 		drawn := 0
 		for i, s := range w.sheets {
 			drawn += len(pictures(s))
+			for _, head := range texts(s, "one") {
+				if !slices.ContainsFunc(texts(s, "cell"), func(c written) bool { return c.y > head.y && math.Abs(c.x-head.x) < 1 }) {
+					t.Fatalf("sheet %d: the head of a table has no row under it", i+1)
+				}
+			}
 			all := append(pictures(s), places(f, s)...)
 			for j, p := range all {
 				if p.bottom > a4.bottom+0.01 {
@@ -54,4 +60,15 @@ func TestFiguresThatWaitStandClear(t *testing.T) {
 			}
 		}
 	})
+}
+
+// texts are the places of a text on a sheet.
+func texts(s *sheet, text string) []written {
+	var all []written
+	for _, i := range s.items {
+		if w, ok := i.(written); ok && w.text == text {
+			all = append(all, w)
+		}
+	}
+	return all
 }

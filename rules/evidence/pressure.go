@@ -65,6 +65,7 @@ type PaschenPoint struct {
 	Name    string
 	Product quantity.PressureLength
 	Voltage quantity.Voltage
+	Share   float64 // of a path: its voltage over that of the curve there, the lowest where there is none
 }
 
 // Paschen is the curve of the vessel's gas at 20 °C and what of the chain lies on it.
@@ -95,6 +96,13 @@ func (e *Evidence) Paschen() (Paschen, error) {
 		}
 	}
 	p.Paths = e.pathsInGas(p.Gas)
+	for i, q := range p.Paths {
+		stands := m.Voltage
+		if v, err := gas.AtProduct(p.Gas, q.Product); err == nil && q.Product >= m.At {
+			stands = v
+		}
+		p.Paths[i].Share = float64(q.Voltage / stands)
+	}
 	if len(p.Law) == 0 || len(p.Paths) == 0 {
 		return p, lack.Because("no path of the chain lies in a gas with a known law")
 	}
@@ -107,7 +115,7 @@ func (e *Evidence) pathsInGas(filling gap.Gas) []PaschenPoint {
 	highest, err := e.Highest()
 	if v := e.chain.Vacuum; err == nil && v != nil && v.PressurePermit.Set() && v.LongestPath.Set() {
 		pressure := float64(v.PressurePermit.V) * v.GaugeFactor.Or(1)
-		all = append(all, PaschenPoint{"longest path at its permit", quantity.PressureLength(pressure * float64(v.LongestPath.V)), highest})
+		all = append(all, PaschenPoint{Name: "longest path at its permit", Product: quantity.PressureLength(pressure * float64(v.LongestPath.V)), Voltage: highest})
 	}
 	for _, s := range e.Spacings() {
 		x, err := e.Spacing(s)
@@ -118,7 +126,7 @@ func (e *Evidence) pathsInGas(filling gap.Gas) []PaschenPoint {
 		if err != nil || x.Voltages.Peak <= 0 {
 			continue
 		}
-		all = append(all, PaschenPoint{s.Name.V, quantity.PressureLength(float64(state.Density()) * 101325 * float64(x.Gap.Clearance)), x.Voltages.Peak})
+		all = append(all, PaschenPoint{Name: s.Name.V, Product: quantity.PressureLength(float64(state.Density()) * 101325 * float64(x.Gap.Clearance)), Voltage: x.Voltages.Peak})
 	}
 	return all
 }

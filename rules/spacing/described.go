@@ -53,7 +53,7 @@ func judgeDescribed(e *evidence.Evidence) rule.Judgement {
 			j.Findings = append(j.Findings, f.Assume(bareEnds).There(true))
 		default:
 			missing = true
-			j.Findings = append(j.Findings, f.Lacking(lack.Because(fmt.Sprintf("no spacing is described between %s and %s", p.from, p.to), "spacing")))
+			j.Findings = append(j.Findings, f.Lacking(lack.Because("no spacing is described between these two", "spacing")))
 		}
 	}
 	if !missing {

@@ -139,7 +139,7 @@ func TestPicturesStandClear(t *testing.T) {
 	for name, r := range samples {
 		for _, paper := range Papers {
 			a := paper.area()
-			for n, s := range layout(f, a, testPen(), page.New(r)).sheets {
+			for n, s := range layout(f, a, testPen(), nil, page.New(r)).sheets {
 				texts := places(f, s)
 				for _, p := range pictures(s) {
 					if p.left < a.left-0.01 || p.right > a.right+0.01 || p.top < a.top-0.01 || p.bottom > a.bottom {

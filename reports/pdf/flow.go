@@ -10,6 +10,7 @@ type flow struct {
 	*fonts
 	area
 	pen     *drawing.Pen
+	ahead   *ahead
 	sheets  []*sheet
 	y       float64
 	anchors map[string]spot
@@ -31,13 +32,14 @@ func newFlow(f *fonts, a area, pen *drawing.Pen) *flow {
 // trial is an empty flow on the same kind of sheet, to see what room things take.
 func (w *flow) trial(y float64) *flow {
 	t := newFlow(w.fonts, w.area, w.pen)
-	t.sheets, t.y, t.drawn = []*sheet{{}}, y, w.drawn
+	t.sheets, t.y, t.drawn, t.ahead = []*sheet{{}}, y, w.drawn, w.ahead
 	return t
 }
 
 // layout sets the document on sheets and gives each its frame and title block.
-func layout(f *fonts, a area, pen *drawing.Pen, d *page.Document) *flow {
+func layout(f *fonts, a area, pen *drawing.Pen, drawn *ahead, d *page.Document) *flow {
 	w := newFlow(f, a, pen)
+	w.ahead = drawn
 	w.turn()
 	for _, s := range d.Sections {
 		w.section(s)

@@ -48,11 +48,21 @@ func (w *flow) show() {
 
 // nextRow draws the first of some figures, and the one beside it if there is one.
 func (w *flow) nextRow(figures []page.Figure) []framed {
+	var row []framed
+	for i, width := range w.rowWidths(figures) {
+		row = append(row, w.framed(figures[i], width))
+	}
+	return row
+}
+
+// rowWidths are the widths of the first of some figures, and of the one beside it if
+// there is one.
+func (w *flow) rowWidths(figures []page.Figure) []float64 {
 	half := (w.across - figureGap) / 2
 	if f := figures[0]; f.Wide || len(figures) == 1 || figures[1].Wide {
-		return []framed{w.framed(f, w.lone(f))}
+		return []float64{w.lone(f)}
 	}
-	return []framed{w.framed(figures[0], half), w.framed(figures[1], half)}
+	return []float64{half, half}
 }
 
 // firstRow is the height of the first row.
@@ -116,11 +126,19 @@ func (w *flow) draw(f page.Figure, width float64) framed {
 	if f.Diagram != nil {
 		out.picture = w.pen.SchematicIn(f.Diagram, millimetres(width), millimetres(room))
 	} else {
-		out.picture = w.pen.Curve(*f.Curve, millimetres(width))
+		out.picture = w.curve(asked{f.Curve, nil, width})
 	}
 	out.scale = out.picture.Scale(millimetres(width), millimetres(room))
 	out.width, out.height = width, float64(out.picture.Height/vg.Millimeter)*out.scale
 	return out
+}
+
+// curve is the picture of a curve, drawn ahead or now.
+func (w *flow) curve(wanted asked) *drawing.Picture {
+	if p := w.ahead.picture(wanted); p != nil {
+		return p
+	}
+	return w.pen.Curve(*wanted.curve, millimetres(wanted.width))
 }
 
 func (w *flow) caption(f page.Figure, width float64) []set {

@@ -18,7 +18,7 @@ func number(s string) (float64, error) { return strconv.ParseFloat(s, 64) }
 func TestLinksLeadToSheets(t *testing.T) {
 	f := testFonts(t)
 	for name, r := range samples {
-		w := layout(f, a4, testPen(), page.New(r))
+		w := layout(f, a4, testPen(), nil, page.New(r))
 		n := 0
 		for _, s := range w.sheets {
 			for _, i := range s.items {
@@ -43,7 +43,7 @@ func TestLinksLeadToSheets(t *testing.T) {
 
 // The first sheet says on which sheet a finding and each section stand.
 func TestFirstSheetSaysWhereToReadOn(t *testing.T) {
-	w := layout(testFonts(t), a4, testPen(), page.New(sample.Failing()))
+	w := layout(testFonts(t), a4, testPen(), nil, page.New(sample.Failing()))
 	text := words(w.sheets[0])
 	for _, entry := range []struct{ title, anchor string }{{"Spacings and vessel", "chapter spacings"}, {"Sources", "sources"}, {"Sign-off", "sign-off"}} {
 		at := w.anchors[entry.anchor]
@@ -73,7 +73,7 @@ func TestBookmarksAndLinksAreInTheFile(t *testing.T) {
 func TestLetter(t *testing.T) {
 	f, a := testFonts(t), Letter.area()
 	for name, r := range samples {
-		for n, s := range layout(f, a, testPen(), page.New(r)).sheets {
+		for n, s := range layout(f, a, testPen(), nil, page.New(r)).sheets {
 			for _, p := range places(f, s) {
 				if p.left < a.frameLeft || p.right > a.frameRight || p.top < a.frameTop || p.bottom > a.frameBottom {
 					t.Errorf("%s, sheet %d: %q leaves the frame", name, n+1, p.text)

@@ -13,6 +13,7 @@ import (
 	"codeberg.org/go-fonts/dejavu/dejavusansbold"
 	"github.com/jung-kurt/gofpdf"
 
+	"kilovet/hv/parallel"
 	"kilovet/reports/drawing"
 	"kilovet/reports/page"
 )
@@ -34,11 +35,12 @@ func RenderOn(p Paper, d *page.Document) ([]byte, error) {
 	if err != nil {
 		return nil, err
 	}
-	names := fonts.names(d.Block)
-	empty := make(chan *gofpdf.Fpdf, 1)
-	go func() { empty <- blank(p, d.Block, names) }() // which reads the fonts meanwhile
-	w := layout(fonts, p.area(), pen, d)
-	out := &painter{Fpdf: <-empty, fonts: fonts, links: map[string]int{}}
+	beside, err := drawing.NewPen()
+	if err != nil {
+		return nil, err
+	}
+	w, empty := prepared(fonts, pen, foresee(d, beside, p.area()), p, d)
+	out := &painter{Fpdf: empty, fonts: fonts, links: map[string]int{}}
 	w.announce(out)
 	for i, s := range w.sheets {
 		out.AddPage()
@@ -47,6 +49,18 @@ func RenderOn(p Paper, d *page.Document) ([]byte, error) {
 		}
 	}
 	return finished(out, d.Block)
+}
+
+// prepared is the document laid out, and a file to paint it in, whose fonts are read and
+// whose curves are drawn meanwhile.
+func prepared(f *fonts, pen *drawing.Pen, curves *ahead, p Paper, d *page.Document) (w *flow, empty *gofpdf.Fpdf) {
+	names := f.names(d.Block)
+	parallel.Do(
+		func() { w = layout(f, p.area(), pen, curves, d) },
+		curves.draw,
+		func() { empty = blank(p, d.Block, names) },
+	)
+	return w, empty
 }
 
 // finished is the bytes of the file, compressed, and without moments that nobody named.

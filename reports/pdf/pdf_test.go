@@ -44,7 +44,7 @@ var testPen = sync.OnceValue(func() *drawing.Pen {
 	return pen
 })
 
-func sheetsOf(f *fonts, d *page.Document) []*sheet { return layout(f, a4, testPen(), d).sheets }
+func sheetsOf(f *fonts, d *page.Document) []*sheet { return layout(f, a4, testPen(), nil, d).sheets }
 
 func render(t testing.TB, d *page.Document) []byte {
 	t.Helper()

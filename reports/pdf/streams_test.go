@@ -17,7 +17,7 @@ import (
 func plainFile(t *testing.T) []byte {
 	t.Helper()
 	f := testFonts(t)
-	w := layout(f, a4, testPen(), page.New(sample.Failing()))
+	w := layout(f, a4, testPen(), nil, page.New(sample.Failing()))
 	out := &painter{Fpdf: blank(A4, page.TitleBlock{}, names{}), fonts: f, links: map[string]int{}}
 	w.announce(out)
 	for _, s := range w.sheets {

@@ -1,0 +1,57 @@
+package pdf
+
+import (
+	"testing"
+
+	"kilovet/reports/internal/sample"
+	"kilovet/reports/page"
+)
+
+// curved is a review with curves.
+func curved() *page.Document {
+	r := sample.Failing()
+	r.Curves = sample.Curves()
+	return page.New(r)
+}
+
+// Every curve of the sheets is drawn ahead, in the width it stands in, and none besides;
+// the file is the one that is had by drawing each when its turn comes.
+func TestCurvesAreDrawnAhead(t *testing.T) {
+	d := curved()
+	curves := foresee(d, testPen(), a4)
+	w, _ := prepared(testFonts(t), testPen(), curves, A4, d)
+	drawn := 0
+	for wanted := range w.drawn {
+		if wanted.curve == nil {
+			continue
+		}
+		drawn++
+		if curves.ready[wanted] == nil {
+			t.Errorf("a curve %.0f mm wide was not foreseen", wanted.width)
+		}
+	}
+	if drawn < 4 || drawn != len(curves.order) {
+		t.Errorf("%d curves stand on the sheets, %d were drawn ahead", drawn, len(curves.order))
+	}
+	now := layout(testFonts(t), a4, testPen(), nil, d)
+	if len(now.sheets) != len(w.sheets) || now.y != w.y {
+		t.Errorf("%d sheets drawn ahead, %d drawn in turn", len(w.sheets), len(now.sheets))
+	}
+}
+
+// A pen that breaks leaves nobody waiting.
+func TestBrokenPenLeavesNobodyWaiting(t *testing.T) {
+	d := curved()
+	curves := foresee(d, nil, a4)
+	func() {
+		defer func() {
+			if recover() == nil {
+				t.Error("no pen drew")
+			}
+		}()
+		curves.draw()
+	}()
+	if w := layout(testFonts(t), a4, testPen(), curves, d); len(w.sheets) == 0 {
+		t.Error("nothing was laid out")
+	}
+}

@@ -2,6 +2,7 @@ package evidence
 
 import (
 	"fmt"
+	"maps"
 	"sync"
 )
 
@@ -48,4 +49,17 @@ func remember[T any](e *Evidence, name string, compute func() (T, error)) (T, er
 	r.value, r.err = compute()
 	r.whole = true
 	return r.value, r.err
+}
+
+// Forget lets go of everything that was computed under the fault of the condition: its state
+// in time is large, and a chain has hundreds of faults. Who asks again has it computed again,
+// with the same result. Without a fault nothing is forgotten.
+func (e *Evidence) Forget() {
+	fault := e.condition.key().fault
+	if fault == "" {
+		return
+	}
+	e.memory.lock.Lock()
+	defer e.memory.lock.Unlock()
+	maps.DeleteFunc(e.memory.known, func(k memoryKey, _ any) bool { return k.condition.fault == fault })
 }

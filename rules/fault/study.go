@@ -125,6 +125,7 @@ func study(e *evidence.Evidence, list []Fault) []Outcome {
 	done := 0
 	parallel.Each(len(list), func(i int) {
 		outcomes[i] = Study(e, list[i])
+		e.Under(list[i].Condition()).Forget() // all that is asked of it stands in the outcome
 		telling.Lock()
 		defer telling.Unlock()
 		done++

@@ -86,6 +86,6 @@ func alongInGas(g gap.Gap, v gap.Voltages) (gap.Answer[quantity.Length], error) 
 		inAir.Altitude = new(quantity.Length)
 	}
 	a, err := creepageOf(inAir, v, group, source)
-	a.Assumptions = append(a.Assumptions, "a surface in "+string(g.Filling())+" at 80 kPa or above needs what it needs in air of the same pollution degree")
+	a.Assumptions = append(a.Assumptions, "a surface in "+string(g.Filling())+" at 800 mbar or above needs what it needs in air of the same pollution degree")
 	return a, err
 }

@@ -28,7 +28,7 @@ func (d *Dimension) Text(v float64) string {
 	case d == area:
 		return Significant(v*1e6) + " mm2"
 	case d == pressure:
-		return Significant(v/100) + " mbar"
+		return pressureText(v / 100)
 	case d == kermaRate:
 		return rateText(v * 3600e6)
 	case d == humidity:
@@ -68,6 +68,16 @@ func fractionText(v float64) string {
 		return Significant(v*1e6) + " ppm"
 	}
 	return Significant(v*100) + " %"
+}
+
+// pressureText writes a pressure given in mbar, with a power of ten below a thousandth as
+// gauges show it: 4.444e-4 beside 4.444e-5.
+func pressureText(v float64) string {
+	if a := math.Abs(v); a > 0 && a < 1e-3 {
+		mantissa, exponent, _ := strings.Cut(strconv.FormatFloat(v, 'e', 3, 64), "e")
+		return strings.TrimRight(strings.TrimRight(mantissa, "0"), ".") + powers.Replace("e"+exponent) + " mbar"
+	}
+	return Significant(v) + " mbar"
 }
 
 // rateText writes an air kerma rate given in µGy/h. A thick wall leaves rates that

@@ -14,7 +14,7 @@ func TestText(t *testing.T) {
 		{Text(Current(60e-6)), "60 µA"}, {Text(Capacitance(2.2e-9)), "2.2 nF"}, {Text(Capacitance(1e-18)), "below 1 fF"}, {Text(Resistance(4.7e6)), "4.7 MΩ"}, {Text(Resistance(1e15)), "1000 TΩ"},
 		{Text(Temperature(303.15)), "30 °C"}, {Text(Temperature(2700)), "2700 K"}, {Text(TemperatureRise(85)), "85 K"},
 		{Text(Fraction(0.1)), "10 %"}, {Text(Fraction(0)), "0 %"}, {Text(Fraction(50e-6)), "50 ppm"}, {Text(Fraction(-0.12)), "-12 %"}, {Text(Fraction(5.6e-12)), "below 0.001 ppm"}, {Text(Fraction(-1e-12)), "above -0.001 ppm"}, {Text(Fraction(0.99996e-9)), "0.001 ppm"},
-		{Text(Area(3e-8)), "0.03 mm2"}, {Text(Pressure(4e-3)), "4e-5 mbar"}, {Text(Pressure(101325)), "1013 mbar"}, {Text(KermaRate(1e-6 / 3600)), "1 µGy/h"}, {Text(Humidity(0.011)), "11 g/m3"},
+		{Text(Area(3e-8)), "0.03 mm2"}, {Text(Pressure(4e-3)), "4e-5 mbar"}, {Text(Pressure(101325)), "1013 mbar"}, {Text(Pressure(4.444e-2)), "4.444e-4 mbar"}, {Text(Pressure(0.1)), "0.001 mbar"}, {Text(Pressure(0)), "0 mbar"}, {Text(KermaRate(1e-6 / 3600)), "1 µGy/h"}, {Text(Humidity(0.011)), "11 g/m3"},
 		{Text(PerKelvin(50e-6)), "50 ppm/K"}, {Text(PerVolt(-1e-6)), "-1 ppm/V"}, {Text(Field(3e6)), "3 MV/m"}, {Text(Angle(5e-3)), "5 mrad"}, {Text(Angle(math.Pi / 2)), "90 deg"}, {Text(Angle(0.0999)), "99.9 mrad"},
 		{Text(Time(60)), "60 s"}, {Text(Time(600)), "600 s"}, {Text(Time(1800)), "30 min"}, {Text(Time(36000)), "10 h"}, {Text(Time(80e-9)), "80 ns"},
 		{Text(Length(0.06)), "60 mm"}, {Text(Length(12e-9)), "12 nm"}, {Text(ThermalResistance(85)), "85 K/W"}, {Text(LinearCapacitance(110e-12)), "110 pF/m"},

@@ -104,7 +104,7 @@ func PointPlane(s State, d quantity.Length) (gap.Answer[quantity.Voltage], error
 	}
 	a := gap.Answer[quantity.Voltage]{
 		Value:   v,
-		Because: fmt.Sprintf("a point against a plane stands it in case A, whose gap at 80 kPa is %s", quantity.Text(similar)),
+		Because: fmt.Sprintf("a point against a plane stands it in case A, whose gap at 800 mbar is %s", quantity.Text(similar)),
 		Sources: []gap.Source{{Text: caseA.Source().Text + " read backwards", Mark: gap.Derived, Governs: true}},
 	}
 	if crossing := streamerField * quantity.Field(s.Density()) * quantity.Field(d); quantity.Voltage(crossing) > v {

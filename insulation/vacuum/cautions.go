@@ -14,7 +14,7 @@ func PumpDownCautions() []Caution {
 	return []Caution{
 		{"helium", "No leak test with helium while the high voltage is on: at low pressure helium breaks down at a much lower voltage than air.", gap.Source{Text: "NASA-HDBK-4007 w/change 1, p. 22", Mark: gap.Read}},
 		{"glow range", "No high voltage while the vessel passes the glow range, pumping or venting. The longest path breaks down first.", FeedthroughSource},
-		{"ion gauge", "At 0.1 Pa and above an ion gauge can put a lethal voltage on metal parts of a chamber that is not earthed: earth every metal part and the controller of the gauge.", gap.Source{Text: "Morrison, Revue Phys. Appl. 20 (1985) 531, abstract", Mark: gap.Read}},
+		{"ion gauge", "At 0.001 mbar and above an ion gauge can put a lethal voltage on metal parts of a chamber that is not earthed: earth every metal part and the controller of the gauge.", gap.Source{Text: "Morrison, Revue Phys. Appl. 20 (1985) 531, abstract", Mark: gap.Read}},
 		{"trapped gas", "Inside vented boxes, shields and potting the pressure is higher than at the gauge. Wait after the permit is reached.", gap.Source{Text: "Vacuum discharge margin in thermal test, Chinese J. Vac. Sci. Technol. 2019, abstract", Mark: gap.Read}},
 		{"leak", "A current that wanders or a pressure that rises with the voltage can be a leak or outgassing: take the voltage off first, then look.", gap.Source{Text: "common practice", Mark: gap.Practice}},
 		{"hidden discharge", hiddenGlow.text(), hiddenGlow.source},

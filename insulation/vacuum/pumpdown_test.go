@@ -23,7 +23,7 @@ func ExampleVessel_Permit() {
 	fmt.Println("none above", quantity.Text(p.Crowded.Value))
 	// Output:
 	// freely up to 4.444e-5 mbar because of 0.001 Torr cm over a path of 300 mm
-	// none above 0.0004444 mbar
+	// none above 4.444e-4 mbar
 }
 
 // Paths, the pressures of air's minimum (0.567 Torr cm) and of 0.001 Torr cm in mbar,

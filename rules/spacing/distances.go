@@ -43,7 +43,7 @@ var clearance = rule.Rule{
 var creepage = rule.Rule{
 	ID: "spacing.creepage", Title: "Creepage distance",
 	Demands: "The distance along the surface is at least what the tables ask for at the highest lasting voltage, and never less than the clearance needed.",
-	Applies: "Every spacing in air or on a printed board, and surfaces in other media where a creepage distance, the material or the ribs of one are given: in vacuum from a tested surface or the practice of alumina, in nitrogen and sulphur hexafluoride at 80 kPa or more as in air, elsewhere from a tested surface; without one too short where the medium alone would need more, in oil and along joints of solids enough where pollution degree 1 in air would be, and unassessed between.",
+	Applies: "Every spacing in air or on a printed board, and surfaces in other media where a creepage distance, the material or the ribs of one are given: in vacuum from a tested surface or the practice of alumina, in nitrogen and sulphur hexafluoride at 800 mbar or more as in air, elsewhere from a tested surface; without one too short where the medium alone would need more, in oil and along joints of solids enough where pollution degree 1 in air would be, and unassessed between.",
 	Margin:  "marginal with less than 10 % in hand",
 	Concern: rule.Life,
 	Sources: []rule.Source{{Text: "IEC 60664-1:2020 Table F.5", Mark: rule.Read, Governs: true}},

@@ -17,6 +17,7 @@ type search struct {
 	still     int     // corrections in a row that led hardly nearer
 	leaps     int     // taken
 	amplified float64 // largest correction so far over the change over the period it answers
+	creeping  bool    // creeps first
 	stray     bool    // Newton's method led astray: leap next
 	stillest  stillest
 	rousing

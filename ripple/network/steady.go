@@ -24,6 +24,8 @@ type Options struct {
 	// and the uncertainty is that of the state started from.
 	Swift bool
 
+	creeping bool // creep first: Newton's method is known to go astray
+
 	work *Work // adds up what searches cost, given up or not
 }
 
@@ -43,7 +45,7 @@ func Steady(c *circuit.Circuit, o Options) (*Periodic, error) {
 		return nil, err
 	}
 	h := newSearch(newShooter(s))
-	h.swift = o.Swift
+	h.swift, h.creeping = o.Swift, o.creeping
 	if o.Most > 0 {
 		h.most = o.Most
 	}
@@ -88,6 +90,14 @@ func attempts() []attempt {
 	}
 }
 
+// ways are the attempts of a search, to creep before the others where it is to.
+func (s *search) ways() []attempt {
+	if !s.creeping {
+		return attempts()
+	}
+	return append([]attempt{{creep: true}}, attempts()...)
+}
+
 // solve searches briskly, and with care where that does not get there.
 func (s *search) solve(from *Periodic) (*Periodic, error) {
 	p, err := s.search(from)
@@ -119,7 +129,7 @@ func (s *search) search(from *Periodic) (*Periodic, error) {
 		}
 	}
 	var err error
-	for _, a := range attempts() {
+	for _, a := range s.ways() {
 		s.press(a.press)
 		if err = s.begin(a); err == nil {
 			return s.refine()

@@ -9,6 +9,8 @@ import (
 	"os"
 	"path/filepath"
 	"strings"
+
+	"kilovet/reports/seal"
 )
 
 // output is a file to be written, already rendered.
@@ -34,20 +36,28 @@ func replaceAll(outputs []output) error {
 	return nil
 }
 
-// kind is what an output is, how files of it begin, and what they hold further on.
-type kind struct{ name, begins, holds string }
+// kind is what an output is, how files of it begin, what they hold further on, and whether
+// they bear the stamp of a sheet to sign.
+type kind struct {
+	name, begins, holds string
+	stamped             bool
+}
 
-// The kinds of output. A PDF names its maker in UTF-16.
+// creator is how a PDF names its maker, in UTF-16.
+const creator = "/Creator (\xfe\xff\x00k\x00i\x00l\x00o\x00v\x00e\x00t\x00 "
+
+// The kinds of output.
 var (
-	sheets  = kind{"PDF of kilovet", "%PDF-", "/Creator (\xfe\xff\x00k\x00i\x00l\x00o\x00v\x00e\x00t\x00 "}
-	results = kind{"JSON of kilovet", `{"contract":`, ""}
-	manuals = kind{"manual page of kilovet", manualBegins, ""}
-	pages   = kind{"page of kilovet", "<!DOCTYPE html>\n<html lang=\"en\" data-made-by=\"kilovet\">", ""}
+	sheets  = kind{name: "PDF of kilovet review", begins: "%PDF-", holds: creator}
+	issued  = kind{name: "PDF of kilovet signoff", begins: "%PDF-", holds: creator, stamped: true}
+	results = kind{name: "JSON of kilovet", begins: `{"contract":`}
+	manuals = kind{name: "manual page of kilovet", begins: manualBegins}
+	pages   = kind{name: "page of kilovet", begins: "<!DOCTYPE html>\n<html lang=\"en\" data-made-by=\"kilovet\">"}
 )
 
 func kindOf(data []byte) kind {
-	for _, k := range []kind{sheets, pages, manuals} {
-		if bytes.HasPrefix(data, []byte(k.begins)) {
+	for _, k := range []kind{sheets, issued, pages, manuals} {
+		if k.made(bytes.NewReader(data)) {
 			return k
 		}
 	}
@@ -83,7 +93,7 @@ func (k kind) made(file io.Reader) bool {
 		return false
 	}
 	rest, err := io.ReadAll(file)
-	return err == nil && bytes.Contains(rest, []byte(k.holds))
+	return err == nil && bytes.Contains(rest, []byte(k.holds)) && seal.Stamped(rest) == k.stamped
 }
 
 func written(outputs []output) string {

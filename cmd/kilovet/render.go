@@ -101,7 +101,7 @@ func made(makers []maker) ([]output, error) {
 
 // writable refuses outputs before anything is computed: sheets on standard output, and
 // what would take the place of something else.
-func (r *reviewing) writable(args []string) error {
+func (r *reviewing) writable(args []string, sheet kind) error {
 	if err := r.sheetsUsable(); err != nil {
 		return err
 	}
@@ -111,7 +111,7 @@ func (r *reviewing) writable(args []string) error {
 	for _, o := range []struct {
 		path string
 		kind kind
-	}{{r.pdf, sheets}, {r.html, pages}} {
+	}{{r.pdf, sheet}, {r.html, pages}} {
 		if o.path == "" {
 			continue
 		}

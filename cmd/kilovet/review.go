@@ -84,7 +84,7 @@ func (r *reviewing) run(args []string) error {
 	if err := leavable(r.without); err != nil {
 		return err
 	}
-	if err := r.writable(args); err != nil {
+	if err := r.writable(args, sheets); err != nil {
 		return err
 	}
 	given, err := r.input(args)

@@ -107,7 +107,7 @@ func (s *signing) usable(args []string) ([]rule.Concern, error) {
 			return nil, exitf(unusable, "--until %s lies before --date %s", s.until, s.date)
 		}
 	}
-	return concerns, s.writable(args)
+	return concerns, s.writable(args, issued)
 }
 
 func dated(flag, text string) (time.Time, error) {

@@ -55,7 +55,7 @@ func (g *gapping) run() error {
 	if err != nil {
 		return err
 	}
-	if err := g.writable(nil); err != nil {
+	if err := g.writable(nil, sheets); err != nil {
 		return err
 	}
 	block, lines := g.gap.block()

@@ -86,6 +86,9 @@ func (s *Stamp) fields() []field {
 	return []field{{"code", &s.Code}, {"version", &s.Version}, {"date", &s.Date}, {"until", &s.Until}, {"paper", &s.Paper}}
 }
 
+// Stamped reports whether a file bears a stamp, changed since or not.
+func Stamped(file []byte) bool { return bytes.Contains(file, []byte("\n"+first)) }
+
 // Open gives the stamp of a sheet that is as it was written.
 func Open(file []byte) (Stamp, error) {
 	var none Stamp

@@ -131,3 +131,16 @@ func FuzzOpen(f *testing.F) {
 		}
 	})
 }
+
+// A stamp is seen in a sheet that was changed too, and in nothing else.
+func TestStamped(t *testing.T) {
+	plain := []byte("%PDF-1.4\na sheet\n")
+	sheet := seal.Seal(plain, seal.Stamp{Date: "2025-03-04"})
+	if seal.Stamped(plain) || !seal.Stamped(sheet) {
+		t.Errorf("plain %v, sealed %v", seal.Stamped(plain), seal.Stamped(sheet))
+	}
+	sheet[10]++
+	if _, err := seal.Open(sheet); err == nil || !seal.Stamped(sheet) {
+		t.Errorf("a changed sheet: %v, stamped %v", err, seal.Stamped(sheet))
+	}
+}

@@ -1,6 +1,7 @@
 package pdf
 
 import (
+	"bytes"
 	"testing"
 
 	"kilovet/reports/internal/sample"
@@ -19,7 +20,7 @@ func curved() *page.Document {
 func TestCurvesAreDrawnAhead(t *testing.T) {
 	d := curved()
 	curves := foresee(d, testPen(), a4)
-	w, _ := prepared(testFonts(t), testPen(), curves, A4, d)
+	w, empty := prepared(testFonts(t), testPen(), curves, A4, d)
 	drawn := 0
 	for wanted := range w.drawn {
 		if wanted.curve == nil {
@@ -33,9 +34,11 @@ func TestCurvesAreDrawnAhead(t *testing.T) {
 	if drawn < 4 || drawn != len(curves.order) {
 		t.Errorf("%d curves stand on the sheets, %d were drawn ahead", drawn, len(curves.order))
 	}
-	now := layout(testFonts(t), a4, testPen(), nil, d)
-	if len(now.sheets) != len(w.sheets) || now.y != w.y {
-		t.Errorf("%d sheets drawn ahead, %d drawn in turn", len(w.sheets), len(now.sheets))
+	f := testFonts(t)
+	ahead, err := painted(w, empty, d.Block)
+	now, err2 := painted(layout(f, a4, testPen(), nil, d), blank(A4, d.Block, f.names(d.Block)), d.Block)
+	if err != nil || err2 != nil || !bytes.Equal(ahead, now) {
+		t.Errorf("%d bytes drawn ahead (%v), %d drawn in turn (%v), not the same", len(ahead), err, len(now), err2)
 	}
 }
 

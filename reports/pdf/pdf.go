@@ -40,7 +40,12 @@ func RenderOn(p Paper, d *page.Document) ([]byte, error) {
 		return nil, err
 	}
 	w, empty := prepared(fonts, pen, foresee(d, beside, p.area()), p, d)
-	out := &painter{Fpdf: empty, fonts: fonts, links: map[string]int{}}
+	return painted(w, empty, d.Block)
+}
+
+// painted is the file with the sheets of a layout in it.
+func painted(w *flow, empty *gofpdf.Fpdf, block page.TitleBlock) ([]byte, error) {
+	out := &painter{Fpdf: empty, fonts: w.fonts, links: map[string]int{}}
 	w.announce(out)
 	for i, s := range w.sheets {
 		out.AddPage()
@@ -48,7 +53,7 @@ func RenderOn(p Paper, d *page.Document) ([]byte, error) {
 			return nil, fmt.Errorf("pdf: sheet %d: %w", i+1, err)
 		}
 	}
-	return finished(out, d.Block)
+	return finished(out, block)
 }
 
 // prepared is the document laid out, and a file to paint it in, whose fonts are read and

@@ -36,7 +36,7 @@ type Remedy struct {
 const (
 	turnedBy  = 100.0 // times or parts of what is there
 	nearness  = 0.01
-	solutions = 5
+	solutions = 7
 	firstStep = 4.0
 	leastTurn = 1.5
 	feeble    = 0.02 // a change of the disturbance's logarithm that counts as none
@@ -107,17 +107,17 @@ func (e *Evidence) turn(k knob, start float64) Remedy {
 		if math.Abs(ub-ua) > feeble*math.Abs(b-a) {
 			next = b - ub*(b-a)/(ub-ua)
 		}
-		if !(next/bound > 0 && next/bound <= reached(bound, b)) {
-			next = bound * reached(bound, b)
+		if furthest := turnable(bound, b); !(next/bound > 0 && next/bound <= furthest) {
+			next = bound * furthest
 		}
 		a, ua, b = b, ub, next
 	}
 	return r
 }
 
-// reached is how far, in parts of the way to the bound, the next turn may go: the square of
-// the last factor, since what the chain is far from that is not foreseen.
-func reached(bound, last float64) float64 { return math.Min(1, 2*last/bound) }
+// turnable is how far, in parts of the way to the bound, the next turn may go: to the square
+// of the last factor, since what the chain is far from that is not foreseen.
+func turnable(bound, last float64) float64 { return math.Min(1, 2*last/bound) }
 
 // firstTurn is the logarithm of the first factor to try, for that of the use at the start.
 // A part with whose first power ripple goes at most may be relaxed as far as it is tried;

@@ -35,7 +35,9 @@
 // led on in leaps of many periods, or by implicit steps in pseudo time (Kelley and Keyes,
 // SIAM J. Numer. Anal. 35 (1998) 508), or the search starts anew. Where the drive is to hold
 // a voltage both are sought together: after each correction the drive is changed by what
-// the voltage lacks, and the state by what that does to the circuit between the peaks. The
+// the voltage lacks, and the state by what that does to the circuit between the peaks. A
+// search that starts from a similar circuit expects that loads take the same charges, for each
+// volt of the drive. The
 // step control makes the period a continuous function of its start, so that the charges
 // come back to 1e-8 of what a diode passes, at worst to 3e-7, and to 1e-5 where no more is
 // asked for (Options.Swift). Work is bounded; what is not reached is a lack. The network is

@@ -63,11 +63,12 @@ func (o *HoldOptions) together(most int) (quantity.Voltage, *Periodic, error) {
 	if most > 0 {
 		h.most = most
 	}
-	h.level = &level{span: s.between(n, circuit.Ground), set: o.signed(c), drive: 1, trust: 1, base: make([]float64, s.states())}
-	p, err := h.solve(o.From)
+	h.level = &level{node: o.Node, span: s.between(n, circuit.Ground), set: o.signed(c), drive: 1, trust: 1, base: make([]float64, s.states())}
+	p, err := h.solve(o.similar())
 	if err != nil {
 		return 0, nil, err
 	}
+	p.trust = h.level.trust
 	peak := o.First * quantity.Voltage(h.level.drive)
 	p.Circuit, err = o.Build(peak)
 	s.c = p.Circuit

@@ -10,6 +10,7 @@ import (
 // is to be: after each correction of the state the drive is changed by what the mean
 // lacks, and the state by what that does to the circuit between the peaks.
 type level struct {
+	node  string
 	span  span
 	set   float64
 	drive float64   // over that of the circuit that was given
@@ -108,8 +109,12 @@ func (s *search) lift(f float64) {
 
 // foreseen is the mean of the voltage in the circuit between the peaks.
 func (s *search) foreseen() float64 {
-	l, n := s.level, s.n
-	return l.span.offset.direct + (l.span.difference(s.peaks.u[:n])+l.span.difference(s.peaks.u[n:]))/2
+	return middle(&s.level.span, s.peaks.u[:s.n], s.peaks.u[s.n:])
+}
+
+// middle is between what a voltage is at the two peaks.
+func middle(s *span, positive, negative []float64) float64 {
+	return s.offset.direct + (s.difference(positive)+s.difference(negative))/2
 }
 
 // aim guesses the drive from the circuit between the peaks.

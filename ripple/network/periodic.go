@@ -21,8 +21,10 @@ type Periodic struct {
 	// Assumptions are what was assumed beyond the description, in plain words.
 	Assumptions []string
 
-	track *track
-	guess []float64 // voltages of the capacitors that the search started from
+	track  *track
+	swings swings
+	peaks  []float64 // potentials at the peaks of the guess, no diode pressed
+	trust  float64   // what the mean changed by over what it was to, where it was held; else zero
 }
 
 // periodic takes the state out of the shooter.
@@ -35,7 +37,7 @@ func (s *shooter) periodic() *Periodic {
 	s.room.give(s.pace.track)
 	s.pace.factor = make([]trio, s.pattern.size()) // what was given belongs to others
 	return &Periodic{Circuit: s.c, Frequency: quantity.Frequency(1 / s.period), Work: w, Assumptions: s.assumptions,
-		track: s.pace.track, guess: s.guessed()}
+		track: s.pace.track, peaks: s.guessed()}
 }
 
 // Period is the length of the period.
@@ -63,41 +65,4 @@ func (s *system) between(from, to circuit.Node) span {
 // spanOf is the way across an element.
 func (p *Periodic) spanOf(e *circuit.Element) span {
 	return p.track.system.between(e.From, e.To)
-}
-
-// startFrom corrects the guess by as much as the guess for a similar circuit had to
-// be corrected, capacitor by capacitor: that changes little where the drive, a load
-// or a value does. What was corrected is taken as a charge, since that is what loads take
-// from a capacitor, and in proportion to the drive, with which most loads go.
-func (s *shooter) startFrom(p *Periodic) {
-	correction := map[string]float64{}
-	t := p.track
-	for i := range t.capacitors {
-		c := &t.capacitors[i]
-		reached := c.volts(t.potentials(0, 3), t.steps[0].sign, t.steps[0].sine[3])
-		correction[t.c.Elements[c.element].Name] = c.value * (reached - p.guess[i])
-	}
-	drive := s.scale / t.scale
-	for k := range s.q {
-		s.q[k] = 0
-	}
-	for i, v := range s.guessed() {
-		c := &s.capacitors[i]
-		c.inject(s.q, c.value*v+drive*correction[s.c.Elements[c.element].Name])
-	}
-	s.pack(s.q, s.amps, s.root, s.x)
-}
-
-// guessed are the voltages of the capacitors at the negative peak of the guess, no diode
-// pressed.
-func (s *shooter) guessed() []float64 {
-	if s.pressed != 0 {
-		s.pressed = 0
-		s.balance(s.step)
-	}
-	v := make([]float64, len(s.capacitors))
-	for i := range v {
-		v[i] = s.capacitors[i].volts(s.peaks.u[s.n:], -1, -1)
-	}
-	return v
 }

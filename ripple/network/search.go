@@ -157,7 +157,11 @@ func (s *search) improve(g grade, size float64, done func() bool) (finished bool
 	if err != nil {
 		return false, err
 	}
-	if math.Abs(f-1) <= s.tolerated(g) && done() {
+	near := math.Abs(f-1) <= s.tolerated(g)
+	if near && g == fine && s.swift && norm(s.step) <= slight*norm(s.x) && s.carryThrough() {
+		return true, nil
+	}
+	if near && done() {
 		if g == rough {
 			s.follows(f)
 		}
@@ -172,6 +176,22 @@ func (s *search) improve(g grade, size float64, done func() bool) (finished bool
 	}
 	s.pace.smooth = s.largestCharge(s.step) <= exacting*s.pace.passed
 	return false, nil
+}
+
+// slight is the largest correction, in parts of the state, that a swift search carries through
+// the period instead of walking it again.
+const slight = 1e-5
+
+// carryThrough carries the correction in hand through the period walked last, to the end of the
+// search. It reports whether it could.
+func (s *search) carryThrough() bool {
+	s.unpack(s.step, s.root, s.dq, s.di)
+	if !s.linear.follow(s.dq, s.di, s.lanes, swiftly*s.pace.passed) {
+		return false
+	}
+	axpy(1, s.step, s.x)
+	s.pace.track = s.linear
+	return true
 }
 
 // atRest reports whether the largest correction that ever answered such a change over the
@@ -243,12 +263,15 @@ func (s *search) answer(x []float64) {
 	s.precondition(x)
 }
 
+// swiftly is the part of what the diodes pass to which the charges come back in a swift search.
+const swiftly = 1e-5
+
 // balanced reports whether the charges come back to 1e-8 of what the diodes pass,
 // or, where rounding keeps them from coming any closer, to 3e-7; in a swift search to 1e-5.
 func (s *shooter) balanced(stalled bool) bool {
 	worst, most := s.largestCharge(s.r), s.largestCharge(s.x)
 	if s.swift {
-		return worst <= math.Max(1e-5*s.pace.passed, 1e-11*most)
+		return worst <= math.Max(swiftly*s.pace.passed, 1e-11*most)
 	}
 	if stalled {
 		return worst <= math.Max(3e-7*s.pace.passed, 1e-11*most)

@@ -48,7 +48,9 @@ func norm(x []float64) float64 { return math.Sqrt(dot(x, x)) }
 func largest(x []float64) float64 {
 	m := 0.0
 	for _, v := range x {
-		m = math.Max(m, math.Abs(v))
+		if v = abs(v); v > m || v != v {
+			m = v
+		}
 	}
 	return m
 }

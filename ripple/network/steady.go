@@ -4,7 +4,6 @@ import (
 	"math"
 
 	"kilovet/hv/circuit"
-	"kilovet/hv/lack"
 	"kilovet/hv/quantity"
 )
 
@@ -15,13 +14,18 @@ type Options struct {
 	Frequency quantity.Frequency
 	// From is a periodic state of a similar circuit to start from.
 	From *Periodic
+	// Before and After are states of two circuits that differ from each other as the circuit
+	// does from that of From, where there are such: what the difference makes of the charges
+	// is foreseen.
+	Before, After *Periodic
 	// Most is the number of steps after which the search is given up; zero serves any
 	// ordinary circuit several times over.
 	Most int
 	// Swift ends the search where the state is known to a part in a million and the charges
 	// come back to 1e-5 of what the diodes pass, for figures that are compared with limits
-	// and ratings; else it is 1e-9 and 1e-8. Where From is near the rough mesh is left out,
-	// and the uncertainty is that of the state started from.
+	// and ratings; else it is 1e-9 and 1e-8. A slight correction is carried through the period
+	// where no switching misplaces more charge than that. Where From is near the rough mesh is
+	// left out, and the uncertainty is that of the state started from.
 	Swift bool
 
 	creeping bool // creep first: Newton's method is known to go astray
@@ -52,7 +56,7 @@ func Steady(c *circuit.Circuit, o Options) (*Periodic, error) {
 	if o.work != nil {
 		defer func() { o.work.add(h.pace.work) }()
 	}
-	return h.solve(o.From)
+	return h.solve(o.similar())
 }
 
 // compile sets up the equations of a circuit.
@@ -99,7 +103,7 @@ func (s *search) ways() []attempt {
 }
 
 // solve searches briskly, and with care where that does not get there.
-func (s *search) solve(from *Periodic) (*Periodic, error) {
+func (s *search) solve(from *similar) (*Periodic, error) {
 	p, err := s.search(from)
 	if err == nil {
 		return p, nil
@@ -115,7 +119,7 @@ func (s *search) solve(from *Periodic) (*Periodic, error) {
 
 // search searches from the state of a similar circuit where there is one, as long as
 // Newton's method gets there by itself, and then in one way after the other.
-func (s *search) search(from *Periodic) (*Periodic, error) {
+func (s *search) search(from *similar) (*Periodic, error) {
 	if from != nil {
 		if s.swift {
 			if p, err := s.pass(from); err == nil {
@@ -140,16 +144,16 @@ func (s *search) search(from *Periodic) (*Periodic, error) {
 
 // pass goes from the state of a similar circuit to that of this one in the fine grade
 // alone, as far as Newton's method gets there by itself.
-func (s *search) pass(from *Periodic) (*Periodic, error) {
+func (s *search) pass(from *similar) (*Periodic, error) {
 	s.prepare(0)
 	s.startFrom(from)
-	s.judge(math.Max(s.pace.passed, from.track.passed()))
+	s.judge(math.Max(s.pace.passed, from.state.track.passed()))
 	s.patience, s.rousing = 0, rousing{}
 	if err := s.converge(fine); err != nil {
 		return nil, err
 	}
 	p := s.periodic()
-	p.Uncertainty = from.Uncertainty
+	p.Uncertainty = from.state.Uncertainty
 	if err := p.plausible(); err != nil {
 		return p, err
 	}
@@ -271,28 +275,4 @@ func (s *shooter) widest(x, y []float64) (name string, worst float64) {
 		}
 	}
 	return name, worst
-}
-
-// plausible refuses a state that only the leakage of the diodes keeps finite, beyond all
-// that a ladder can put across one: a load that draws current nothing feeds.
-func (p *Periodic) plausible() error {
-	drawn := 0.0
-	for i := range p.track.sinks {
-		drawn = max(drawn, abs(p.track.sinks[i].value))
-	}
-	beyond := math.Max(100, 2*float64(len(p.track.diodes))) * p.track.scale
-	for i := range p.track.diodes {
-		d := &p.track.diodes[i]
-		if v := float64(p.swing(&d.span).Peak()); v > beyond && v*d.leak > 1e-3*drawn && drawn > 0 {
-			return lack.Failed("a load draws current that only the leakage of %s could feed", p.Circuit.Elements[d.element].Name)
-		}
-	}
-	return nil
-}
-
-func abs(x float64) float64 {
-	if x < 0 {
-		return -x
-	}
-	return x
 }

@@ -2,6 +2,7 @@ package network
 
 import (
 	"math"
+	"sync"
 
 	"kilovet/hv/circuit"
 	"kilovet/hv/quantity"
@@ -27,7 +28,27 @@ func (p *Periodic) Between(from, to circuit.Node) (Swing, error) {
 	if err != nil {
 		return Swing{}, err
 	}
-	return p.swing(&s), nil
+	return p.swings.of([2]circuit.Node{from, to}, func() Swing { return p.swing(&s) }), nil
+}
+
+// swings remembers those that were asked for, by ends.
+type swings struct {
+	sync.Mutex
+	known map[[2]circuit.Node]Swing
+}
+
+func (s *swings) of(ends [2]circuit.Node, swing func() Swing) Swing {
+	s.Lock()
+	defer s.Unlock()
+	w, known := s.known[ends]
+	if !known {
+		if s.known == nil {
+			s.known = map[[2]circuit.Node]Swing{}
+		}
+		w = swing()
+		s.known[ends] = w
+	}
+	return w
 }
 
 // Across is the voltage across an element, from From to To.

@@ -100,19 +100,12 @@ var throughout = trio{
 // undergoes; of none it is zero.
 func (t *track) carryWatching(dq, di []float64, lanes []trio, du []float64, watched *span) (mean float64) {
 	for k := range t.steps {
-		h := t.steps[k].length
-		pole, part, all := poleR, &residue[2], &throughout
+		h, all := t.steps[k].length, &throughout
+		pole, stages := t.atPoles(k, dq, di, lanes)
 		if t.steps[k].euler {
-			pole, part, all = 1, &trio{r: 1}, &trio{r: 1}
+			all = &stages[2]
 		}
-		for i, q := range dq {
-			lanes[i] = trio{r: q, a: q}
-		}
-		for i := range t.inductors {
-			x := t.changeOfCoil(i, h, pole, di[i], trio{})
-			t.inductors[i].injectTrio(lanes, trio{-h * x.r, -h * x.a, -h * x.b})
-		}
-		t.pattern.solve(t.factorsOf(k), lanes)
+		part := &stages[2]
 		for i := range t.inductors {
 			x := t.changeOfCoil(i, h, pole, di[i], t.inductors[i].differenceTrio(lanes))
 			di[i] = part.of(&x)
@@ -127,6 +120,29 @@ func (t *track) carryWatching(dq, di []float64, lanes []trio, du []float64, watc
 		t.charge(du, dq)
 	}
 	return mean
+}
+
+// settling makes the stages of a step of the implicit Euler method.
+var settling = [3]trio{{r: 1}, {r: 1}, {r: 1}}
+
+// atPoles leaves in the lanes what a change of charges and inductor currents at the start of
+// a step makes of its solutions at the poles; it returns the real pole and what makes the
+// stages of them.
+func (t *track) atPoles(k int, dq, di []float64, lanes []trio) (pole float64, stages *[3]trio) {
+	pole, stages = poleR, &residue
+	if t.steps[k].euler {
+		pole, stages = 1, &settling
+	}
+	for i, q := range dq {
+		lanes[i] = trio{r: q, a: q}
+	}
+	h := t.steps[k].length
+	for i := range t.inductors {
+		x := t.changeOfCoil(i, h, pole, di[i], trio{})
+		t.inductors[i].injectTrio(lanes, trio{-h * x.r, -h * x.a, -h * x.b})
+	}
+	t.pattern.solve(t.factorsOf(k), lanes)
+	return pole, stages
 }
 
 // changeOfCoil is a change of an inductor's current at the poles: (δi₀ + h δv/L)/p.

@@ -67,7 +67,7 @@ func (e *Evidence) Standing(node string) (*network.Periodic, error) {
 		if err != nil {
 			return nil, err
 		}
-		p, err := e.solve(c.Bridge(ArcName, node, "ground", arcResistance), nil, true)
+		p, err := e.solve(c.Bridge(ArcName, node, "ground", arcResistance), beside{}, true)
 		return p.Periodic, err
 	})
 }

@@ -101,10 +101,10 @@ func (e *Evidence) held() (quantity.Voltage, error) {
 
 // peakFor finds the peak for a mean at the sensed node.
 func (e *Evidence) peakFor(set quantity.Voltage) (trial, error) {
-	from := e.alike()
+	near := e.alike()
 	peak, at, err := network.Hold(network.HoldOptions{
 		Node: e.chain.Divider.Senses.Or("output"), Set: set, First: e.firstPeak(),
-		Options: network.Options{Frequency: e.chain.Drive.Frequency.V, From: from, Swift: from != nil},
+		Options: e.options(near, near.from != nil),
 		Build:   e.trustedAt,
 	})
 	e.tellSolved()

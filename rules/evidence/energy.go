@@ -157,7 +157,7 @@ func (e *Evidence) TouchCurrent(node string) (quantity.Current, error) {
 			return quantity.Current(float64(v) / float64(measuring)), err
 		}
 		const body = "measuring resistor"
-		p, err := e.solve(c.Bridge(body, node, "ground", measuring), nil, true)
+		p, err := e.solve(c.Bridge(body, node, "ground", measuring), beside{}, true)
 		if err != nil {
 			return 0, err
 		}

@@ -83,12 +83,12 @@ func (e *Evidence) unregulated() (quantity.Voltage, error) {
 }
 
 // settle is where the chain comes to rest at a drive.
-func (e *Evidence) settle(peak quantity.Voltage, from *network.Periodic) (failure, error) {
+func (e *Evidence) settle(peak quantity.Voltage, near beside) (failure, error) {
 	c, err := e.circuitAt(peak)
 	if err != nil {
 		return failure{}, err
 	}
-	s, err := network.Settle(trusted(c), network.Failed{Part: e.condition.Fault.Part, Ladder: e.condition.Fault.Cuts}, network.Options{Frequency: e.chain.Drive.Frequency.V, From: from, Swift: true})
+	s, err := network.Settle(trusted(c), network.Failed{Part: e.condition.Fault.Part, Ladder: e.condition.Fault.Cuts}, e.options(near, true))
 	if err != nil {
 		return failure{}, err
 	}
@@ -108,11 +108,11 @@ func (e *Evidence) regulated() (failure, error) {
 	return network.Regulate(network.Regulation[failure]{
 		Wanted: wanted, First: peak, Limit: e.limit, Read: e.read,
 		At: func(peak quantity.Voltage, before *failure) (failure, error) {
-			from := e.alike()
+			near := e.alike()
 			if before != nil {
-				from = before.Periodic
+				near = beside{from: before.Periodic}
 			}
-			return e.settle(peak, from)
+			return e.settle(peak, near)
 		},
 	})
 }
@@ -124,7 +124,7 @@ func (e *Evidence) seek(wanted, first quantity.Voltage) (failure, error) {
 	}
 	peak, p, err := network.Seek(network.HoldOptions{
 		Node: "divider.tap", Set: wanted, First: first,
-		Options: network.Options{Frequency: e.chain.Drive.Frequency.V, From: e.alike(), Swift: true},
+		Options: e.options(e.alike(), true),
 		Build:   e.trustedAt,
 	})
 	if err != nil {

@@ -54,7 +54,7 @@ func (e *Evidence) atDriveOf(drive, state State) (periodic, error) {
 		if err != nil {
 			return periodic{}, err
 		}
-		return e.solve(c, near.Periodic, true)
+		return e.solve(c, beside{from: near.Periodic}, true)
 	})
 }
 

@@ -97,7 +97,7 @@ func (e *Evidence) split(d *Drop, mean quantity.Voltage) error {
 
 // topOf is how the top of an edited circuit moves.
 func (e *Evidence) topOf(c *circuit.Circuit) (network.Swing, error) {
-	p, err := e.solve(c, nil, true)
+	p, err := e.solve(c, beside{}, true)
 	if err != nil {
 		return network.Swing{}, err
 	}

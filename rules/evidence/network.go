@@ -13,8 +13,8 @@ type periodic struct{ *network.Periodic }
 // solve finds the steady state of a circuit, from that of a similar one where given. Only
 // the states of the nominal chain at its full drive are solved as exactly as it goes; those
 // beside them swiftly, to a part in a million.
-func (e *Evidence) solve(c *circuit.Circuit, from *network.Periodic, swift bool) (periodic, error) {
-	p, err := network.Steady(trusted(c), network.Options{Frequency: e.chain.Drive.Frequency.V, From: from, Swift: swift})
+func (e *Evidence) solve(c *circuit.Circuit, near beside, swift bool) (periodic, error) {
+	p, err := network.Steady(trusted(c), e.options(near, swift))
 	e.tellSolved()
 	return periodic{p}, err
 }

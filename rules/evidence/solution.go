@@ -24,20 +24,20 @@ func (e *Evidence) solution() (periodic, error) {
 		if err != nil {
 			return periodic{}, err
 		}
-		from := e.alike()
-		swift := from != nil
+		near := e.alike()
+		swift := near.from != nil
 		if e.holds() {
 			if t, err := e.trial(); err == nil {
 				if t.peak <= e.chain.Drive.Peak.V {
 					return periodic{t.state}, nil
 				}
-				from = t.state // of this circuit at more drive than there is
+				near = beside{from: t.state} // of this circuit at more drive than there is
 			}
 		}
 		if same, ok := e.unchanged(); ok {
 			return same, nil
 		}
-		return e.solve(c, from, swift)
+		return e.solve(c, near, swift)
 	})
 }
 
@@ -61,39 +61,6 @@ func (e *Evidence) unchanged() (periodic, bool) {
 	}
 	s, err := own.solution()
 	return s, err == nil
-}
-
-// alike is a state to start from: that of the chain before it was changed, of the nominal
-// chain at the same drive, or of the whole and nominal one at its full drive; nil where
-// this is the one, or where it has none.
-func (e *Evidence) alike() *network.Periodic {
-	near, c := e, e.condition
-	full := Condition{State: c.State}
-	switch {
-	case e.before != nil:
-		near = e.before.Under(c)
-	case c.Corner != Nominal && c.Fault.Name == "":
-		c.Corner = Nominal
-		near = e.Under(c)
-	case c.key() != full.key():
-		near = e.Under(full)
-	default:
-		return nil
-	}
-	s, err := near.solution()
-	if err != nil {
-		return nil
-	}
-	return s.Periodic
-}
-
-// working is the state of the chain at work, to start from; nil where it has none.
-func (e *Evidence) working() *network.Periodic {
-	s, err := e.Under(Condition{State: Working}).solution()
-	if err != nil {
-		return nil
-	}
-	return s.Periodic
 }
 
 // Network is the steady state in time, for wave-forms and what else is not asked often.

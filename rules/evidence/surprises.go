@@ -40,7 +40,7 @@ func (e *Evidence) BalancedRipple() (quantity.Voltage, error) {
 				el.Wave.Amplitude = quantity.Voltage(math.Copysign(float64(peak), float64(el.Wave.Amplitude)))
 			}
 			return true
-		}), s.Periodic, true)
+		}), beside{from: s.Periodic}, true)
 		if err != nil {
 			return 0, err
 		}

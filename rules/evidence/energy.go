@@ -148,22 +148,49 @@ const measuring quantity.Resistance = 2e3
 // to ground, for as long as it is on; of an alternating one the peak.
 func (e *Evidence) TouchCurrent(node string) (quantity.Current, error) {
 	return remember(e, "touch "+e.canonical(node), func() (quantity.Current, error) {
-		c, err := e.Circuit()
-		if err != nil {
-			return 0, err
-		}
 		if e.OnMains(node) {
 			v, err := e.Touched(node)
 			return quantity.Current(float64(v) / float64(measuring)), err
 		}
-		const body = "measuring resistor"
-		p, err := e.solve(c.Bridge(body, node, "ground", measuring), beside{}, true)
+		p, err := e.measured(node)
 		if err != nil {
 			return 0, err
 		}
 		f, err := p.Through(body)
 		return f.Peak, err
 	})
+}
+
+// body is the element through which a touch current is measured.
+const body = "measuring resistor"
+
+// measured is the state with the measuring resistor from a node to ground.
+func (e *Evidence) measured(node string) (periodic, error) {
+	return remember(e, "measured "+e.canonical(node), func() (periodic, error) {
+		c, err := e.Circuit()
+		if err != nil {
+			return periodic{}, err
+		}
+		return e.solve(c.Bridge(body, node, "ground", measuring), e.untouched(c, node), true)
+	})
+}
+
+// untouched is what the state with a node measured is near to: of a node with next to no
+// direct voltage that without the resistor, of an end of the heater, which hangs on the cathode
+// by a few ohms, that with the cathode measured; of others nothing.
+func (e *Evidence) untouched(c *circuit.Circuit, node string) beside {
+	if v, err := e.Potential(node); err == nil && magnitude(v) < e.chain.Drive.Peak.V/100 {
+		return beside{from: e.found()}
+	}
+	_, there := c.Node("cathode")
+	if !there || node != "heater.a" && node != "heater.b" || e.canonical(node) == e.canonical("cathode") {
+		return beside{}
+	}
+	s, err := e.measured("cathode")
+	if err != nil {
+		return beside{}
+	}
+	return beside{from: s.Periodic}
 }
 
 // longLadder is the number of stages above which the current that a person draws is

@@ -1,6 +1,9 @@
 package network
 
-import "math"
+import (
+	"math"
+	"sync"
+)
 
 // followed is what a small change of its start makes of a track.
 type followed struct {
@@ -20,7 +23,10 @@ const unlike = 0.1
 // whether that is no more than a charge; else the track is as it was. The factors are not
 // those of the changed steps.
 func (t *track) follow(dq, di []float64, lanes []trio, most float64) bool {
-	f := &followed{track: t, du: make([]float64, len(t.u)), damps: make([]float64, len(t.amps)), later: make([]float64, len(t.steps))}
+	f := changes.Get().(*followed)
+	defer func() { f.track = nil; changes.Put(f) }()
+	f.track, f.misplaced = t, 0
+	f.du, f.damps, f.later = sized(f.du, len(t.u)), sized(f.damps, len(t.amps)), sized(f.later, len(t.steps))
 	for k := range t.steps {
 		f.carryOver(k, dq, di, lanes)
 	}
@@ -31,6 +37,17 @@ func (t *track) follow(dq, di []float64, lanes []trio, most float64) bool {
 		f.move(k)
 	}
 	return true
+}
+
+// changes is memory that serves one track after another.
+var changes = sync.Pool{New: func() any { return new(followed) }}
+
+// sized is a vector of a length, its values left from before.
+func sized(x []float64, n int) []float64 {
+	if cap(x) < n {
+		return make([]float64, n)
+	}
+	return x[:n]
 }
 
 // carryOver takes the change over a step.

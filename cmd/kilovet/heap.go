@@ -20,7 +20,9 @@ var floor atomic.Pointer[[heapFloor]byte]
 
 // makeRoom prepares the heap for a review, once in a process.
 var makeRoom = sync.OnceFunc(func() {
+	usual := debug.SetGCPercent(-1) // nothing is collected for so much that is never touched
 	floor.Store(new([heapFloor]byte))
 	inLargePages(make([]byte, heapRoom))
+	debug.SetGCPercent(usual)
 	debug.FreeOSMemory() // the room becomes free memory of the heap
 })

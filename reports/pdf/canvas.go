@@ -90,8 +90,7 @@ func (c *canvas) Stroke(p vg.Path) {
 	c.out.SetDrawColor(r, g, b)
 	c.out.SetLineWidth(float64(c.now.width/vg.Millimeter) * size)
 	c.out.SetDashPattern(dashes(c.now.dash, size), float64(c.now.offset/vg.Millimeter)*size)
-	c.path(p)
-	c.out.DrawPath("D")
+	c.path(p, "S")
 }
 
 func dashes(pattern []vg.Length, size float64) []float64 {
@@ -105,8 +104,7 @@ func dashes(pattern []vg.Length, size float64) []float64 {
 func (c *canvas) Fill(p vg.Path) {
 	r, g, b := rgb(c.now.ink)
 	c.out.SetFillColor(r, g, b)
-	c.path(p)
-	c.out.DrawPath("F")
+	c.path(p, "f")
 }
 
 func rgb(ink color.Color) (r, g, b int) {
@@ -117,22 +115,26 @@ func rgb(ink color.Color) (r, g, b int) {
 	return int(red >> 8), int(green >> 8), int(blue >> 8)
 }
 
-// path hands a path to the library, whose places are checked first.
-func (c *canvas) path(p vg.Path) {
+// path writes a path, whose places are checked first, and how it is drawn.
+func (c *canvas) path(p vg.Path, how string) {
+	line := c.out.line[:0]
 	for _, s := range p {
 		switch s.Type {
 		case vg.MoveComp:
-			c.out.MoveTo(c.place(s.Pos))
+			x, y := c.place(s.Pos)
+			line = append(c.out.places(line, 2, x, y), "m\n"...)
 		case vg.LineComp:
-			c.out.LineTo(c.place(s.Pos))
+			x, y := c.place(s.Pos)
+			line = append(c.out.places(line, 2, x, y), "l\n"...)
 		case vg.CurveComp:
-			c.curve(s)
+			line = c.curve(line, s)
 		case vg.ArcComp:
-			c.arc(s)
+			line = c.arc(line, s)
 		case vg.CloseComp:
-			c.out.ClosePath()
+			line = append(line, "h\n"...)
 		}
 	}
+	c.out.put(append(line, how...))
 }
 
 func (c *canvas) place(p vg.Point) (x, y float64) {
@@ -144,20 +146,19 @@ func (c *canvas) place(p vg.Point) (x, y float64) {
 	return x, y
 }
 
-func (c *canvas) curve(s vg.PathComp) {
+func (c *canvas) curve(line []byte, s vg.PathComp) []byte {
 	x, y := c.place(s.Pos)
 	cx, cy := c.place(s.Control[0])
 	if len(s.Control) == 1 {
-		c.out.CurveTo(cx, cy, x, y)
-		return
+		return append(c.out.places(line, 5, cx, cy, x, y), "v\n"...)
 	}
 	dx, dy := c.place(s.Control[1])
-	c.out.CurveBezierCubicTo(cx, cy, dx, dy, x, y)
+	return append(c.out.places(line, 5, cx, cy, dx, dy, x, y), "c\n"...)
 }
 
 // arc draws an arc as cubic curves of at most a quarter turn each, which stay within
 // 3e-4 of its radius.
-func (c *canvas) arc(s vg.PathComp) {
+func (c *canvas) arc(line []byte, s vg.PathComp) []byte {
 	pieces := max(1, int(math.Ceil(math.Abs(s.Angle)/(math.Pi/2)-1e-9)))
 	step := s.Angle / float64(pieces)
 	k := vg.Length(4.0 / 3 * math.Tan(step/4))
@@ -167,11 +168,12 @@ func (c *canvas) arc(s vg.PathComp) {
 		sin2, cos2 := math.Sincos(to)
 		p := s.Pos.Add(vg.Point{X: s.Radius * vg.Length(cos), Y: s.Radius * vg.Length(sin)})
 		q := s.Pos.Add(vg.Point{X: s.Radius * vg.Length(cos2), Y: s.Radius * vg.Length(sin2)})
-		c.curve(vg.PathComp{Pos: q, Control: []vg.Point{
+		line = c.curve(line, vg.PathComp{Pos: q, Control: []vg.Point{
 			p.Add(vg.Point{X: -k * s.Radius * vg.Length(sin), Y: k * s.Radius * vg.Length(cos)}),
 			q.Add(vg.Point{X: k * s.Radius * vg.Length(sin2), Y: -k * s.Radius * vg.Length(cos2)}),
 		}})
 	}
+	return line
 }
 
 // FillString writes a text; that it is turned is known from the matrix.

@@ -20,6 +20,7 @@ type item interface {
 // painter puts items into a file; it knows where links lead.
 type painter struct {
 	*gofpdf.Fpdf
+	operators
 	fonts *fonts
 	links map[string]int
 	err   error // what a picture could not draw

@@ -55,7 +55,11 @@ func (r *reviewing) render(review *rules.Review, note string) (outputs []output,
 	if r.html != "" {
 		makers = append(makers, maker{r.html, func() ([]byte, error) { return html.RenderWith(review, html.Options{Note: note}) }})
 	}
-	makers = append(makers, maker{r.json, func() ([]byte, error) { return json.Render(review) }})
+	if r.json == "" {
+		makers = append(makers, maker{"", func() ([]byte, error) { return nil, json.Check(review) }})
+	} else {
+		makers = append(makers, maker{r.json, func() ([]byte, error) { return json.Render(review) }})
+	}
 	outputs, err = made(makers)
 	if err != nil {
 		return nil, nil, err
@@ -69,7 +73,7 @@ func (r *reviewing) render(review *rules.Review, note string) (outputs []output,
 	return slices.DeleteFunc(outputs, func(o output) bool { return o.path == "" }), text.Render(review, how), nil
 }
 
-// maker makes an output; one without a path is made to see that it can be.
+// maker makes an output; one without a path only sees that results could be made.
 type maker struct {
 	path string
 	make func() ([]byte, error)

@@ -123,7 +123,9 @@ func nearest(q at, others []at) float64 {
 	const enough = 7.0
 	least := enough
 	for _, o := range others {
-		least = min(least, math.Hypot(q.x-o.x, q.y-o.y))
+		if dx, dy := q.x-o.x, q.y-o.y; math.Abs(dx) < least && math.Abs(dy) < least {
+			least = min(least, math.Hypot(dx, dy))
+		}
 	}
 	return math.Round(least*2) / 2
 }

@@ -59,9 +59,11 @@ func (w *svgWriter) shape(s shape) {
 	case s.text != "":
 		w.text(s)
 	case s.width == 0:
-		fmt.Fprintf(w, "<path d=\"%s\"%s/>\n", w.data(s.path), paint(s))
+		w.data(s.path)
+		w.WriteString(paint(s) + "/>\n")
 	default:
-		fmt.Fprintf(w, "<path d=\"%s\" stroke-width=\"%s\"%s%s/>\n", w.data(s.path), decimal(s.width), dashes(s.dash), faint(s))
+		w.data(s.path)
+		w.WriteString(` stroke-width="` + decimal(s.width) + `"` + dashes(s.dash) + faint(s) + "/>\n")
 	}
 }
 
@@ -98,59 +100,69 @@ func (w *svgWriter) text(s shape) {
 	if s.face.Font.Weight == xfont.WeightBold {
 		weight = ` font-weight="bold"`
 	}
-	fmt.Fprintf(w, "<text %s font-size=\"%s\" textLength=\"%s\" lengthAdjust=\"spacingAndGlyphs\"%s%s>%s</text>\n",
-		w.place("x=\"%s\" y=\"%s\"", s.at), decimal(s.face.Font.Size), decimal(mm(s.wide)), weight, paint(s), escaped(s.text))
+	w.place(`<text x="`, s.at, `" y="`)
+	fmt.Fprintf(w, "\" font-size=\"%s\" textLength=\"%s\" lengthAdjust=\"spacingAndGlyphs\"%s%s>%s</text>\n",
+		decimal(s.face.Font.Size), decimal(mm(s.wide)), weight, paint(s), escaped(s.text))
 }
 
-// place writes a point with the picture's upper left corner as its origin.
-func (w *svgWriter) place(format string, p vg.Point) string {
+// place writes a point with the picture's upper left corner as its origin, and what
+// stands before each of its numbers.
+func (w *svgWriter) place(before string, p vg.Point, between string) {
 	p = p.Sub(w.corner)
-	return fmt.Sprintf(format, decimal(p.X), decimal(w.height-p.Y))
+	w.WriteString(before)
+	w.Write(appended(w.AvailableBuffer(), p.X))
+	w.WriteString(between)
+	w.Write(appended(w.AvailableBuffer(), w.height-p.Y))
 }
 
-// data is the path in SVG's own terms.
-func (w *svgWriter) data(path vg.Path) string {
-	var d strings.Builder
+// data begins an element with a path in SVG's own terms.
+func (w *svgWriter) data(path vg.Path) {
+	w.WriteString(`<path d="`)
 	for _, c := range path {
 		switch c.Type {
 		case vg.MoveComp:
-			d.WriteString(w.place("M%s %s", c.Pos))
+			w.place("M", c.Pos, " ")
 		case vg.LineComp:
-			d.WriteString(w.place("L%s %s", c.Pos))
+			w.place("L", c.Pos, " ")
 		case vg.ArcComp:
-			w.arc(&d, c)
+			w.arc(c)
 		case vg.CurveComp:
-			d.WriteString(map[int]string{1: "Q", 2: "C"}[len(c.Control)])
+			w.WriteString(map[int]string{1: "Q", 2: "C"}[len(c.Control)])
 			for _, p := range c.Control {
-				d.WriteString(w.place("%s %s ", p))
+				w.place("", p, " ")
+				w.WriteByte(' ')
 			}
-			d.WriteString(w.place("%s %s", c.Pos))
+			w.place("", c.Pos, " ")
 		case vg.CloseComp:
-			d.WriteString("Z")
+			w.WriteByte('Z')
 		}
 	}
-	return d.String()
+	w.WriteByte('"')
 }
 
 // arc draws an arc in two halves, since SVG knows none that ends where it began.
-func (w *svgWriter) arc(d *strings.Builder, c vg.PathComp) {
-	sweep := 0 // of angles that grow upwards, while SVG's grow downwards
+func (w *svgWriter) arc(c vg.PathComp) {
+	sweep := "0" // of angles that grow upwards, while SVG's grow downwards
 	if c.Angle < 0 {
-		sweep = 1
+		sweep = "1"
 	}
+	radius := decimal(c.Radius)
 	for _, share := range []float64{0.5, 1} {
 		angle := c.Start + c.Angle*share
 		end := c.Pos.Add(vg.Point{X: c.Radius * vg.Length(math.Cos(angle)), Y: c.Radius * vg.Length(math.Sin(angle))})
-		fmt.Fprintf(d, "A%s %s 0 0 %d %s", decimal(c.Radius), decimal(c.Radius), sweep, w.place("%s %s", end))
+		w.place("A"+radius+" "+radius+" 0 0 "+sweep+" ", end, " ")
 	}
 }
 
-// decimal writes a length in millimetres to a hundredth.
-func decimal(l vg.Length) string {
-	text := strconv.FormatFloat(millimetres(l), 'f', 2, 64)
-	text = strings.TrimRight(strings.TrimRight(text, "0"), ".")
-	if text == "-0" {
-		return "0"
+// decimal is a length in millimetres to a hundredth.
+func decimal(l vg.Length) string { return string(appended(nil, l)) }
+
+// appended writes a length in millimetres to a hundredth into an empty line.
+func appended(line []byte, l vg.Length) []byte {
+	line = strconv.AppendFloat(line, millimetres(l), 'f', 2, 64)
+	line = bytes.TrimRight(bytes.TrimRight(line, "0"), ".")
+	if string(line) == "-0" {
+		return line[1:]
 	}
-	return text
+	return line
 }

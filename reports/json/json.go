@@ -20,7 +20,7 @@ const Contract = 1
 // NaN: an infinite margin is left out, and a figure or amount that is not finite
 // is an error, since nobody may mistake it for an answer.
 func Render(r *rules.Review) ([]byte, error) {
-	if err := finite(r); err != nil {
+	if err := Check(r); err != nil {
 		return nil, err
 	}
 	var out bytes.Buffer
@@ -32,7 +32,9 @@ func Render(r *rules.Review) ([]byte, error) {
 	return out.Bytes(), nil
 }
 
-func finite(r *rules.Review) error {
+// Check says what of a review no JSON can hold, which no other output may show either:
+// a figure, an amount or a number of a curve or table that is not finite.
+func Check(r *rules.Review) error {
 	for _, c := range r.Curves {
 		if err := c.Check(); err != nil {
 			return err

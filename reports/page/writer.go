@@ -229,7 +229,7 @@ func nearest(figures []figure.Figure, f rule.Finding) []figure.Figure {
 	for _, fig := range figures {
 		known := func(o figure.Figure) bool { return o.ID == fig.ID }
 		switch {
-		case !speaksOf(fig.Subject, f.Subject) || slices.ContainsFunc(append(first, then...), known):
+		case !speaksOf(fig.Subject, f.Subject) || slices.ContainsFunc(first, known) || slices.ContainsFunc(then, known):
 		case slices.ContainsFunc(strings.Fields(heading(fig.ID)), func(w string) bool { return slices.Contains(rule, w) }):
 			first = append(first, fig)
 		default:

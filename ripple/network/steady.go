@@ -153,6 +153,7 @@ func (s *search) pass(from *similar) (*Periodic, error) {
 		return nil, err
 	}
 	p := s.periodic()
+	p.lessons = s.recall.lessons
 	p.Uncertainty = from.state.Uncertainty
 	if err := p.plausible(); err != nil {
 		return p, err
@@ -192,6 +193,7 @@ func (s *search) refine() (*Periodic, error) {
 		return nil, err
 	}
 	p := s.periodic()
+	p.lessons = s.recall.lessons
 	after := append([]float64(nil), s.x...)
 	s.returnTo(&before)
 	p.Uncertainty = quantity.Voltage(s.apart(s.x, after))

@@ -12,6 +12,7 @@ type search struct {
 	sound     spot    // the last state that was not a step back
 	most      int     // steps that all attempts together may take; zero is about two budgets
 	patience  int     // leaps it may take
+	slight    float64 // largest correction that a swift search carries through
 	last      float64 // change over the period at the state corrected last
 	trial     bool    // the last correction has yet to prove itself
 	still     int     // corrections in a row that led hardly nearer
@@ -32,7 +33,7 @@ const (
 func newSearch(s *shooter) *search {
 	e := newEnvelope(s)
 	e.hurried = true
-	return &search{envelope: e}
+	return &search{envelope: e, slight: slight}
 }
 
 // approach corrects the state in one grade until a correction is a small part of it.
@@ -158,7 +159,7 @@ func (s *search) improve(g grade, size float64, done func() bool) (finished bool
 		return false, err
 	}
 	near := math.Abs(f-1) <= s.tolerated(g)
-	if near && g == fine && s.swift && norm(s.step) <= slight*norm(s.x) && s.carryThrough() {
+	if near && g == fine && s.swift && norm(s.step) <= s.slight*norm(s.x) && s.carryThrough() {
 		return true, nil
 	}
 	if near && done() {
@@ -183,10 +184,12 @@ func (s *search) improve(g grade, size float64, done func() bool) (finished bool
 const slight = 1e-5
 
 // carryThrough carries the correction in hand through the period walked last, to the end of the
-// search. It reports whether it could.
+// search. It reports whether that misplaces so little charge that neither the balance nor, by
+// the largest correction that a charge ever asked for, the state suffers.
 func (s *search) carryThrough() bool {
+	bears := s.small() * norm(s.x) * math.Sqrt(s.typical) / s.amplified
 	s.unpack(s.step, s.root, s.dq, s.di)
-	if !s.linear.follow(s.dq, s.di, s.lanes, swiftly*s.pace.passed) {
+	if !s.linear.follow(s.dq, s.di, s.lanes, math.Min(swiftly*s.pace.passed, bears)) {
 		return false
 	}
 	axpy(1, s.step, s.x)

@@ -57,7 +57,7 @@ var (
 
 func kindOf(data []byte) kind {
 	for _, k := range []kind{sheets, issued, pages, manuals} {
-		if k.made(bytes.NewReader(data)) {
+		if rest, begins := bytes.CutPrefix(data, []byte(k.begins)); begins && k.goesOn(rest) {
 			return k
 		}
 	}
@@ -80,20 +80,26 @@ func spares(path string, k kind) error {
 		return exitf(files, "%s cannot be read, and what it holds is not replaced unseen: %v", path, plain(err))
 	}
 	defer file.Close()
-	if !k.made(file) {
+	if !k.made(file, int(info.Size())) {
 		return exitf(unusable, "%s exists and is no %s: it is not replaced; give another name, or remove it first", path, k.name)
 	}
 	return nil
 }
 
-// made reports whether a file is of the kind.
-func (k kind) made(file io.Reader) bool {
+// made reports whether a file of about a size is of the kind.
+func (k kind) made(file io.Reader, size int) bool {
 	begin := make([]byte, len(k.begins))
 	if _, err := io.ReadFull(file, begin); err != nil || string(begin) != k.begins {
 		return false
 	}
-	rest, err := io.ReadAll(file)
-	return err == nil && bytes.Contains(rest, []byte(k.holds)) && seal.Stamped(rest) == k.stamped
+	rest := bytes.NewBuffer(make([]byte, 0, size+bytes.MinRead))
+	_, err := rest.ReadFrom(file)
+	return err == nil && k.goesOn(rest.Bytes())
+}
+
+// goesOn reports whether what follows the beginning of a file is of the kind.
+func (k kind) goesOn(rest []byte) bool {
+	return bytes.Contains(rest, []byte(k.holds)) && seal.Stamped(rest) == k.stamped
 }
 
 func written(outputs []output) string {

@@ -3,6 +3,7 @@ package html
 import (
 	"cmp"
 	"fmt"
+	"html/template"
 	"strings"
 
 	"kilovet/reports/digest"
@@ -27,7 +28,7 @@ type reviewed struct {
 	Missing              []digest.Key
 	Schematic            *schematic
 	Verdicts, Concerns   []choice
-	Findings             []finding
+	Articles             template.HTML
 	Chapters             []chapter
 	Assumptions          []string
 	Cautions, PassedOver []fact
@@ -66,10 +67,11 @@ func reviewPage(r *rules.Review, o Options) (*reviewed, error) {
 		shell:   newShell(clean(cmp.Or(r.Heading.Title, untitled)), "Review before first power-up", o, filter, light),
 		Block:   block(r.Heading),
 		Verdict: r.Verdict, Sentence: clean(digest.Sentence(r)), Counts: digest.Counts(r.Counts), Deference: clean(r.Deference),
-		Findings:    findings(r),
 		Assumptions: cleaned(r.Assumptions), Program: clean(strings.TrimSpace(r.Program.Name + " " + r.Program.Version)),
 	}
-	ids := idsOf(p.Findings)
+	all := findings(r)
+	ids := idsOf(all)
+	p.Articles = articles(all)
 	p.Against, p.Narrow = entries(digest.Against(r), ids), entries(digest.Narrow(r), ids)
 	for _, l := range r.Summary {
 		p.Summary = append(p.Summary, fact{clean(l.Label), clean(l.Text)})
@@ -191,7 +193,7 @@ func (p *reviewed) contents() []link {
 		}
 	}
 	add(p.Schematic != nil, "schematic", "Schematic")
-	add(len(p.Findings) > 0, "findings", "Findings")
+	add(p.Articles != "", "findings", "Findings")
 	for _, c := range p.Chapters {
 		add(true, c.ID, c.Title)
 	}

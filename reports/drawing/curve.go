@@ -33,10 +33,11 @@ func (pen *Pen) Curve(c exhibit.Curve, width vg.Length) *Picture {
 type plot struct {
 	*sheet
 	exhibit.Curve
-	width float64
-	x, y  scale
-	tags  []box // places taken by numbers and letters
-	key   []entry
+	width   float64
+	x, y    scale
+	tags    []box  // places taken by numbers and letters
+	courses [][]at // of all lines, once they are numbered
+	key     []entry
 }
 
 func (p *plot) draw() {

@@ -79,14 +79,16 @@ func (p *plot) numberLine(i int, l exhibit.Line) {
 	if tag == "" {
 		return
 	}
-	others := p.others(i)
+	if p.courses == nil {
+		p.courses = p.everyCourse()
+	}
 	type candidate struct {
 		at
 		clear float64
 	}
 	var all []candidate
 	for _, q := range p.spread(l, 16, (2*i+1)*8/len(p.Lines)) {
-		all = append(all, candidate{q, nearest(q, others)})
+		all = append(all, candidate{q, p.clear(q, i)})
 	}
 	slices.SortStableFunc(all, func(a, b candidate) int { return cmp.Compare(b.clear, a.clear) })
 	for _, c := range all {
@@ -107,24 +109,28 @@ func (p *plot) spread(l exhibit.Line, count, first int) []at {
 	return all
 }
 
-// others is where the other lines go.
-func (p *plot) others(i int) []at {
-	var all []at
-	for j, l := range p.Lines {
-		if j != i {
-			all = append(all, p.spread(l, 48, 0)...)
-		}
+// everyCourse is where each line goes.
+func (p *plot) everyCourse() [][]at {
+	all := make([][]at, len(p.Lines))
+	for i, l := range p.Lines {
+		all[i] = p.spread(l, 48, 0)
 	}
 	return all
 }
 
-// nearest is the distance to the nearest of some places; beyond enough all are alike.
-func nearest(q at, others []at) float64 {
+// clear is the distance of a place on a line to the other lines; beyond enough all are
+// alike.
+func (p *plot) clear(q at, i int) float64 {
 	const enough = 7.0
 	least := enough
-	for _, o := range others {
-		if dx, dy := q.x-o.x, q.y-o.y; math.Abs(dx) < least && math.Abs(dy) < least {
-			least = min(least, math.Hypot(dx, dy))
+	for j, course := range p.courses {
+		if j == i {
+			continue
+		}
+		for _, o := range course {
+			if dx, dy := q.x-o.x, q.y-o.y; math.Abs(dx) < least && math.Abs(dy) < least {
+				least = min(least, math.Hypot(dx, dy))
+			}
 		}
 	}
 	return math.Round(least*2) / 2

@@ -70,15 +70,11 @@ func prepared(f *fonts, pen *drawing.Pen, curves *ahead, p Paper, d *page.Docume
 
 // finished is the bytes of the file, compressed, and without moments that nobody named.
 func finished(out *painter, block page.TitleBlock) ([]byte, error) {
-	var plain bytes.Buffer
-	if err := out.Output(&plain); err != nil {
+	var small deflating
+	if err := out.Output(&small); err != nil {
 		return nil, fmt.Errorf("pdf: %w", err)
 	}
-	file, err := deflated(plain.Bytes())
-	if err != nil {
-		return nil, fmt.Errorf("pdf: %w", err)
-	}
-	return withoutMoment(withoutMoment(file, "CreationDate", issued(block)), "ModDate", undated), nil
+	return withoutMoment(withoutMoment(small.file, "CreationDate", issued(block)), "ModDate", undated), nil
 }
 
 // names are what the file says of itself.

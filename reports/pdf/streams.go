@@ -12,6 +12,18 @@ import (
 	"sync"
 )
 
+// deflating takes a file that comes in one piece, without a copy of it, and compresses it.
+type deflating struct{ file []byte }
+
+func (d *deflating) Write(plain []byte) (int, error) {
+	if d.file != nil {
+		return 0, errStructure
+	}
+	file, err := deflated(plain)
+	d.file = file
+	return len(plain), err
+}
+
 // deflated is a file with its plain streams compressed. The library sets up a compressor
 // anew for each sheet, which takes longer than to compress; here a few serve all.
 func deflated(file []byte) ([]byte, error) {

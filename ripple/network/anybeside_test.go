@@ -12,9 +12,8 @@ import (
 
 // Any loaded ladder found swiftly from the state of one whose values are up to a tenth other is the
 // same whether the last slight correction is carried through the period or the period is
-// walked again: mean potentials to a part in a million of the largest, swings to one in a
-// hundred thousand, means of the diodes' currents to a ten-thousandth of the largest, peaks to a
-// hundredth of their own.
+// walked again: potentials to a part in fifty thousand of the largest, means of the diodes'
+// currents to a thousandth of the largest, peaks to a hundredth of their own.
 func TestAnyCarriedThroughIsAsWalkedOn(t *testing.T) {
 	rapid.Check(t, func(t *rapid.T) {
 		whole, err := Steady(buildFor(t, drawLadder(t)), Options{Most: 5000})
@@ -64,17 +63,17 @@ func sameState(t *rapid.T, walked, carried *Periodic) {
 			continue
 		}
 		b, _ := carried.At(circuit.Node(n))
-		if math.Abs(float64(b.Mean-a.Mean)) > 1e-6*volts || math.Abs(float64(b.PeakToPeak()-a.PeakToPeak())) > 1e-5*volts {
+		if off := max(b.Mean-a.Mean, a.Mean-b.Mean, b.PeakToPeak()-a.PeakToPeak(), a.PeakToPeak()-b.PeakToPeak()); off > quantity.Voltage(2e-5*volts)+carried.Uncertainty {
 			t.Errorf("%v: %v, walked %v", walked.Circuit.Labels(circuit.Node(n)), b, a)
 		}
 	}
 	for i := range walked.Circuit.Elements {
 		e := &walked.Circuit.Elements[i]
-		if e.Kind != circuit.Diode {
+		if _, impulse := walked.Through(e.Name); e.Kind != circuit.Diode || impulse != nil {
 			continue
 		}
 		a, b := walked.Diode(e.Name), carried.Diode(e.Name)
-		if math.Abs(float64(b.Mean-a.Mean)) > 1e-4*amps || math.Abs(float64(b.Peak-a.Peak)) > 0.01*float64(a.Peak)+1e-4*amps {
+		if math.Abs(float64(b.Mean-a.Mean)) > 1e-3*amps || math.Abs(float64(b.Peak-a.Peak)) > 0.01*float64(a.Peak)+1e-3*amps {
 			t.Errorf("%s: %v, walked %v (%v)", e.Name, b, a, carried.Work)
 		}
 	}

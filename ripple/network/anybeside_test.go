@@ -29,11 +29,11 @@ func TestAnyCarriedThroughIsAsWalkedOn(t *testing.T) {
 		})
 		carried, err := foundSwiftly(t, other, whole, slight)
 		walked, err2 := foundSwiftly(t, other, whole, 0)
-		if err != nil || err2 != nil {
-			if (err == nil) != (err2 == nil) {
-				t.Fatalf("carried through: %v, walked on: %v", err, err2)
-			}
+		if err2 != nil {
 			return
+		}
+		if err != nil {
+			t.Fatalf("not reached where it is carried through: %v", err)
 		}
 		sameState(t, walked, carried)
 	})

@@ -140,62 +140,73 @@ func (c *crowd) remove(i int) []int {
 type factors struct {
 	mesh  *mesh
 	g     []float64 // by slot
+	arms  []float64 // by arm: its conductance when its node was removed
 	share []float64 // by pivot: one over all conductance at the node when it was removed; zero where there was none
 }
 
 func (m *mesh) newFactors() *factors {
-	return &factors{m, make([]float64, m.size), make([]float64, len(m.pivots))}
+	return &factors{m, make([]float64, m.size), make([]float64, len(m.arms)), make([]float64, len(m.pivots))}
 }
 
 // factor removes all nodes of the network with the given conductances, by slot.
 func (f *factors) factor(g []float64) {
 	copy(f.g, g)
 	clear(f.g[len(g):])
-	arms, fills := int32(0), int32(0)
+	f.remove()
+}
+
+// remove removes all nodes of the network whose conductances are in place.
+func (f *factors) remove() {
+	first, fills, g := int32(0), int32(0), f.g
 	for k := range f.mesh.pivots {
 		p := &f.mesh.pivots[k]
-		sum := 0.0
-		for _, a := range f.mesh.arms[arms:p.arms] {
-			sum += f.g[a.slot]
+		sum, arms := 0.0, f.mesh.arms[first:p.arms]
+		kept := f.arms[first:p.arms][:len(arms)]
+		for i, a := range arms {
+			y := g[a.slot]
+			kept[i] = y
+			sum += y
 		}
 		f.share[k] = 0
 		if sum > 0 {
 			share := 1 / sum
 			f.share[k] = share
 			for _, x := range f.mesh.fills[fills:p.fills] {
-				f.g[x.slot] += f.g[x.one] * share * f.g[x.other]
+				g[x.slot] += g[x.one] * share * g[x.other]
 			}
 		}
-		arms, fills = p.arms, p.fills
+		first, fills = p.arms, p.fills
 	}
 }
 
 // solve finds the potentials for the currents fed into the nodes, which it uses up.
 // A node that hangs on nothing keeps the potential it had in v.
 func (f *factors) solve(current, v []float64) {
-	arms := int32(0)
-	for k := range f.mesh.pivots {
-		p := &f.mesh.pivots[k]
-		share := current[p.node] * f.share[k]
-		for _, a := range f.mesh.arms[arms:p.arms] {
-			current[a.node] += share * f.g[a.slot]
+	pivots := f.mesh.pivots
+	share, first := f.share[:len(pivots)], int32(0)
+	for k := range pivots {
+		p := &pivots[k]
+		passed, arms := current[p.node]*share[k], f.mesh.arms[first:p.arms]
+		kept := f.arms[first:p.arms][:len(arms)]
+		for i, a := range arms {
+			current[a.node] += passed * kept[i]
 		}
-		arms = p.arms
+		first = p.arms
 	}
 	v[0] = 0
-	for k := len(f.mesh.pivots) - 1; k >= 0; k-- {
-		p := &f.mesh.pivots[k]
-		if f.share[k] == 0 {
+	for k := len(pivots) - 1; k >= 0; k-- {
+		p, end := &pivots[k], first
+		if first = 0; k > 0 {
+			first = pivots[k-1].arms
+		}
+		if share[k] == 0 {
 			continue
 		}
-		first := int32(0)
-		if k > 0 {
-			first = f.mesh.pivots[k-1].arms
+		total, arms := current[p.node], f.mesh.arms[first:end]
+		kept := f.arms[first:end][:len(arms)]
+		for i, a := range arms {
+			total += kept[i] * v[a.node]
 		}
-		total := current[p.node]
-		for _, a := range f.mesh.arms[first:p.arms] {
-			total += f.g[a.slot] * v[a.node]
-		}
-		v[p.node] = total * f.share[k]
+		v[p.node] = total * share[k]
 	}
 }

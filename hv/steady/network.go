@@ -85,6 +85,16 @@ func (n *network) at(node circuit.Node, v []float64) float64 {
 	return v[n.spots[node].joint] + n.spots[node].offset
 }
 
+// joined are the potentials of the joints, each by its first node; ground's is zero.
+func (n *network) joined(v Voltages) []float64 {
+	joined := make([]float64, n.joints)
+	for i := len(v) - 1; i > 0; i-- {
+		joined[n.spots[i].joint] = float64(v[i]) - n.spots[i].offset
+	}
+	joined[0] = 0
+	return joined
+}
+
 // across is the voltage over an element, From above To.
 func (n *network) across(e *circuit.Element, v []float64) float64 {
 	return n.at(e.From, v) - n.at(e.To, v)

@@ -9,25 +9,36 @@ import (
 )
 
 // rundown is a circuit of capacitors, resistors and ideal diodes left to itself.
-// Its state is the voltage of every capacitor.
+// Its state is the potential of every joint.
 type rundown struct {
 	net    *network
 	stores []store
 	wires  []wire
 	valves []valve
 
+	counted []*wire // whose charge is asked for
+
 	mesh    *mesh
 	factors *factors
-	always  feed      // conductances and currents of the wires
-	still   feed      // those with the capacitors in an implicit Euler stage
-	g       []float64 // by slot, with the diodes
-	current []float64 // by joint, fed in
-	v       []float64 // by joint
-	most    float64   // largest capacitor voltage
-	diode   float64   // ohm, common to all diodes that conduct; zero for ideal ones
-	gOn     float64   // of a conducting diode
-	lost    bool      // the diodes did not settle
-	fresh   bool      // the factors are those of the present step and diodes
+	links   []link
+	always  feed      // of the wires
+	held    feed      // of the capacitors, as conductances over a second
+	still   []float64 // by slot: conductances in an implicit Euler stage, diodes apart
+	ends    []int     // joints but ground that a diode ends on
+	rate    float64   // one over the length of the stage
+	state   []float64 // by joint
+	start   []float64 // by joint: what a stage starts from
+	fed     []float64 // by joint: currents fed in there, those of diodes apart
+	current []float64 // by joint, with the diodes
+	v       []float64 // by joint, at the end of a stage
+	change  [stages][]float64
+	least   float64 // of the largest capacitor voltage: of those between joints of fixed distance
+	most    float64 // largest capacitor voltage
+	next    float64 // the same at the end of the step tried
+	diode   float64 // ohm, common to all diodes that conduct; zero for ideal ones
+	gOn     float64 // of a conducting diode
+	lost    bool    // the diodes did not settle
+	fresh   bool    // the factors are those of the present step and diodes
 	work    Work
 }
 
@@ -42,13 +53,16 @@ type edge struct {
 	slot     int
 }
 
-// store is a capacitor with its voltage and the one it is taken to start a stage from.
+// store is a capacitor with its voltage before and after.
 type store struct {
 	edge
-	c, u, start float64
-	end         float64         // of the stage
-	g           float64         // of an implicit Euler stage
-	rise        [stages]float64 // slopes of the stages times the step
+	c, u float64
+}
+
+// link is all capacitance between two joints, with one offset.
+type link struct {
+	from, to  int32
+	c, offset float64
 }
 
 // wire is a resistor.
@@ -78,7 +92,7 @@ func runDown(c *circuit.Circuit, from Voltages, given []tie) (*rundown, error) {
 	if err != nil {
 		return nil, err
 	}
-	r := &rundown{net: net}
+	r := &rundown{net: net, state: net.joined(from)}
 	for i := range c.Elements {
 		if err := r.add(&c.Elements[i], from); err != nil {
 			return nil, err
@@ -130,14 +144,45 @@ func (r *rundown) weave() {
 	r.eachEdge(func(e *edge) { e.slot = r.mesh.slot(e.from, e.to) })
 	r.factors = r.mesh.newFactors()
 	joints := r.net.joints
-	r.always, r.still = newFeed(r.mesh.size, joints), newFeed(r.mesh.size, joints)
+	r.always, r.held, r.still = newFeed(r.mesh.size, joints), newFeed(r.mesh.size, joints), make([]float64, r.mesh.size)
 	for i := range r.wires {
-		w := &r.wires[i]
-		r.always.lay(&w.edge, w.g)
-		r.always.drive(&w.edge, w.g)
+		r.always.lay(&r.wires[i].edge, r.wires[i].g)
 	}
-	r.g, r.current, r.v = make([]float64, r.mesh.size), make([]float64, joints), make([]float64, joints)
+	for i := range r.stores {
+		r.held.lay(&r.stores[i].edge, r.stores[i].c)
+		r.link(&r.stores[i])
+	}
+	for i := range r.valves {
+		v := &r.valves[i]
+		for _, joint := range [2]int{v.from, v.to} {
+			if joint != 0 && !slices.Contains(r.ends, joint) {
+				r.ends = append(r.ends, joint)
+			}
+		}
+	}
+	for _, row := range []*[]float64{&r.start, &r.fed, &r.current, &r.v, &r.change[0], &r.change[1], &r.change[2]} {
+		*row = make([]float64, joints)
+	}
 	r.most = r.highest()
+}
+
+// link adds a store to the links, or to one of them where they are alike.
+func (r *rundown) link(s *store) {
+	if s.slot == noSlot {
+		r.least = math.Max(r.least, math.Abs(s.offset))
+		return
+	}
+	l := link{int32(s.from), int32(s.to), s.c, s.offset}
+	if l.from > l.to {
+		l.from, l.to, l.offset = l.to, l.from, -l.offset
+	}
+	for i := range r.links {
+		if o := &r.links[i]; o.from == l.from && o.to == l.to && o.offset == l.offset {
+			o.c += l.c
+			return
+		}
+	}
+	r.links = append(r.links, l)
 }
 
 func (r *rundown) eachEdge(visit func(*edge)) {
@@ -152,18 +197,17 @@ func (r *rundown) eachEdge(visit func(*edge)) {
 	}
 }
 
-// over is the voltage over an edge.
+// over is the voltage over an edge at the end of a stage.
 func (r *rundown) over(e *edge) float64 { return r.v[e.from] - r.v[e.to] + e.offset }
 
-// feed is what a network of conductances is solved from.
+// feed is what edges of one kind conduct.
 type feed struct {
-	g       []float64 // by slot
-	current []float64 // by joint, fed in
-	sum     []float64 // by joint, of all conductances there
+	g   []float64 // by slot
+	sum []float64 // by joint, of all that ends there
 }
 
 func newFeed(slots, joints int) feed {
-	return feed{make([]float64, slots), make([]float64, joints), make([]float64, joints)}
+	return feed{make([]float64, slots), make([]float64, joints)}
 }
 
 // lay adds the conductance of an edge.
@@ -174,23 +218,6 @@ func (f *feed) lay(e *edge, g float64) {
 	f.g[e.slot] += g
 	f.sum[e.from] += g
 	f.sum[e.to] += g
-}
-
-// drive adds the current of a conductance.
-func (f *feed) drive(e *edge, g float64) {
-	if e.slot == noSlot {
-		return
-	}
-	i := -g * e.offset
-	f.current[e.from] += i
-	f.current[e.to] -= i
-}
-
-// copy takes what another feed has.
-func (f *feed) copy(o *feed) {
-	copy(f.g, o.g)
-	copy(f.current, o.current)
-	copy(f.sum, o.sum)
 }
 
 // highest is the largest capacitor voltage.

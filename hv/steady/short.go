@@ -95,6 +95,11 @@ func (r *rundown) deliver(group []bool) (Delivered, error) {
 			charge -= q
 		}
 	}
+	for i := range r.wires {
+		if e := r.wires[i].element; group[e.To] != group[e.From] {
+			r.counted = append(r.counted, &r.wires[i])
+		}
+	}
 	for i := range r.stores {
 		bring(&r.stores[i].edge, -r.stores[i].c*r.stores[i].u)
 	}
@@ -103,8 +108,8 @@ func (r *rundown) deliver(group []bool) (Delivered, error) {
 	for i := range r.stores {
 		bring(&r.stores[i].edge, r.stores[i].c*r.stores[i].u)
 	}
-	for i := range r.wires {
-		bring(&r.wires[i].edge, r.wires[i].charge)
+	for _, w := range r.counted {
+		bring(&w.edge, w.charge)
 	}
 	for i := range r.valves {
 		bring(&r.valves[i].edge, r.valves[i].charge)

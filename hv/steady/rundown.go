@@ -63,6 +63,7 @@ type store struct {
 type link struct {
 	from, to  int32
 	c, offset float64
+	slack     float64 // by how much more than others it may be wrong
 }
 
 // wire is a resistor.
@@ -166,13 +167,30 @@ func (r *rundown) weave() {
 	r.most = r.highest()
 }
 
+// slacken lets an error have the same energy at every capacitor: a stray one beside a
+// ladder's may be wrong by more than one that stands at the highest voltage and holds most.
+func (r *rundown) slacken() {
+	const tightest, loosest = 1.0 / 64, 64
+	held, highest := 0.0, r.highest()
+	for i := range r.stores {
+		held = math.Max(held, math.Sqrt(r.stores[i].c)*math.Abs(r.stores[i].u))
+	}
+	if highest == 0 {
+		return
+	}
+	for i := range r.links {
+		l := &r.links[i]
+		l.slack = math.Max(tightest, math.Min(held/highest/math.Sqrt(l.c), loosest))
+	}
+}
+
 // link adds a store to the links, or to one of them where they are alike.
 func (r *rundown) link(s *store) {
 	if s.slot == noSlot {
 		r.least = math.Max(r.least, math.Abs(s.offset))
 		return
 	}
-	l := link{int32(s.from), int32(s.to), s.c, s.offset}
+	l := link{int32(s.from), int32(s.to), s.c, s.offset, 1}
 	if l.from > l.to {
 		l.from, l.to, l.offset = l.to, l.from, -l.offset
 	}

@@ -103,7 +103,8 @@ func (r *rundown) deliver(group []bool) (Delivered, error) {
 	for i := range r.stores {
 		bring(&r.stores[i].edge, -r.stores[i].c*r.stores[i].u)
 	}
-	p := pace{tolerance: 2e-3, floor: 1e-3 * r.highest(), done: 1e-9 * r.highest()}
+	r.slacken()
+	p := pace{tolerance: 5e-5, floor: r.highest(), done: 1e-9 * r.highest()}
 	err := r.run(p, func(float64) {})
 	for i := range r.stores {
 		bring(&r.stores[i].edge, r.stores[i].c*r.stores[i].u)

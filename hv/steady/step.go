@@ -28,9 +28,10 @@ var weights = [stages][stages]float64{
 var share = [stages]float64{weights[2][0], weights[2][1], gamma}
 
 const (
-	firstStep = 1e-12 // s: shorter than any time constant of a chain
-	horizon   = 1e12  // s: what has not happened by then never will
-	growth    = 5     // at most from one step to the next
+	firstStep = 1e-12         // s: shorter than any time constant of a chain
+	horizon   = 1e12          // s: what has not happened by then never will
+	shortest  = firstStep / 5 // below which a step is taken whatever it is wrong by
+	growth    = 20            // at most from one step to the next
 )
 
 // pace says how closely a run is followed.
@@ -47,7 +48,7 @@ func (r *rundown) run(p pace, see func(t float64)) error {
 	see(0)
 	for t, h, longer := 0.0, firstStep, float64(growth); t < horizon && r.most > p.done; {
 		strain := r.step(h, p)
-		if strain > 1 && h > firstStep/growth {
+		if strain > 1 && h > shortest {
 			h *= math.Max(0.2, 0.8/math.Cbrt(strain))
 			longer = 1 // what refused this step refuses the next long one as well
 			continue
@@ -55,7 +56,7 @@ func (r *rundown) run(p pace, see func(t float64)) error {
 		t += h
 		r.accept(h)
 		see(t)
-		h *= math.Min(longer, 0.9/math.Cbrt(math.Max(strain, 1e-3)))
+		h *= math.Min(longer, 0.9/math.Cbrt(math.Max(strain, 1e-4)))
 		longer = growth
 	}
 	for i := range r.stores {
@@ -123,7 +124,7 @@ func (r *rundown) strain(p pace) (strain float64) {
 		if end > next {
 			next = end
 		}
-		if bound := p.tolerance * (end + floor); wrong > strain*bound {
+		if bound := p.tolerance * (end + floor*l.slack); wrong > strain*bound {
 			strain = wrong / bound
 		}
 	}

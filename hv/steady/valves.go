@@ -115,12 +115,11 @@ func (r *rundown) turn(try int) (turned bool) {
 	return turned
 }
 
+// topmost is the largest potential before and after, from which the change was found.
 func (r *rundown) topmost() float64 {
 	most := 0.0
-	for _, v := range r.v {
-		if v = math.Abs(v); v > most {
-			most = v
-		}
+	for j, v := range r.v {
+		most = max(most, math.Abs(v), math.Abs(r.start[j]))
 	}
 	return most
 }

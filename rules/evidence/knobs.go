@@ -15,8 +15,7 @@ type knob struct {
 	unit string // SI
 	now  float64
 	more bool // more of it means less ripple
-	// steep is set where ripple may go with more than the first power of the value, or rest
-	// on others until it comes near.
+	// steep is set where ripple may go with more than the first power of the value.
 	steep bool
 	set   func(c *chain.Chain, factor float64)
 }
@@ -44,7 +43,7 @@ func (e *Evidence) knobs() []knob {
 			c.Multiplier = &m
 		}})
 	if p := c.Multiplier.PickupToOutput; p.V > 0 {
-		all = append(all, knob{"multiplier.pickup_to_output", "F", float64(p.V), false, true, func(c *chain.Chain, f float64) {
+		all = append(all, knob{"multiplier.pickup_to_output", "F", float64(p.V), false, false, func(c *chain.Chain, f float64) {
 			m := *c.Multiplier
 			m.PickupToOutput.V *= quantity.Capacitance(f)
 			c.Multiplier = &m

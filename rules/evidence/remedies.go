@@ -120,16 +120,17 @@ func (e *Evidence) turn(k knob, start float64) Remedy {
 func turnable(bound, last float64) float64 { return math.Min(1, 2*last/bound) }
 
 // firstTurn is the logarithm of the first factor to try, for that of the use at the start.
-// A part with whose first power ripple goes at most may be relaxed as far as it is tried;
-// else it takes about its first power.
+// A part with whose first power ripple goes at most takes about that power, or is relaxed as
+// far as it is tried; one of which less is better falls to what others leave at most, and rises
+// with about its first power.
 func (k knob) firstTurn(use float64) float64 {
-	switch {
-	case k.steep:
+	switch relaxed := use <= 0; {
+	case k.steep, !k.more && !relaxed:
 		return math.Log(firstStep)
-	case use <= 0:
+	case k.more && relaxed:
 		return math.Log(turnedBy)
 	}
-	return math.Min(math.Max(use, math.Log(leastTurn)), math.Log(turnedBy))
+	return math.Min(math.Max(math.Abs(use), math.Log(leastTurn)), math.Log(turnedBy))
 }
 
 // change turns the knob by a factor.

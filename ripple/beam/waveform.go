@@ -1,8 +1,9 @@
 package beam
 
 import (
+	"cmp"
 	"math"
-	"sort"
+	"slices"
 
 	"kilovet/hv/lack"
 	"kilovet/hv/quantity"
@@ -62,7 +63,8 @@ func Sampled(samples []quantity.Voltage) (Waveform, quantity.Voltage, error) {
 	return Waveform{sweep(unit)}, quantity.Voltage(amplitude), nil
 }
 
-// edge is where a stretch of a wave-form begins or ends to count.
+// edge is where one stretch of a wave-form ends and the next begins: by how much the
+// density of what counts there changes, upwards, and what dwells there.
 type edge struct{ at, density, step float64 }
 
 // level is the rise, in amplitudes, below which a stretch counts as dwelling at
@@ -72,20 +74,22 @@ const level = 1e-7
 // sweep tabulates the time a closed polygon of mean zero dwells below each value.
 func sweep(samples []float64) *table {
 	weight := 1 / float64(len(samples))
-	edges := make([]edge, 0, 2*len(samples))
+	edges := make([]edge, len(samples))
 	variance := 0.0
 	for i, a := range samples {
-		b := samples[(i+1)%len(samples)]
+		next := (i + 1) % len(samples)
+		b := samples[next]
+		edges[i].at = a
 		variance += weight * (a*a + a*b + b*b) / 3
-		low, high := min(a, b), max(a, b)
-		if high-low < level {
-			edges = append(edges, edge{at: (low + high) / 2, step: weight})
+		if math.Abs(b-a) < level {
+			edges[i].step += weight
 			continue
 		}
-		density := weight / (high - low)
-		edges = append(edges, edge{at: low, density: density}, edge{at: high, density: -density})
+		density := weight / (b - a) // below zero where it falls: from b up to a
+		edges[i].density += density
+		edges[next].density -= density
 	}
-	sort.Slice(edges, func(i, j int) bool { return edges[i].at < edges[j].at })
+	slices.SortFunc(edges, func(a, b edge) int { return cmp.Compare(a.at, b.at) })
 	t := accumulate(edges)
 	t.variance, t.full = variance, 2
 	return t
@@ -93,7 +97,7 @@ func sweep(samples []float64) *table {
 
 // accumulate adds up sorted edges to a cumulative probability.
 func accumulate(edges []edge) *table {
-	t := &table{}
+	t := &table{x: make([]float64, 0, len(edges)), c: make([]float64, 0, len(edges))}
 	sum, density, at := 0.0, 0.0, edges[0].at
 	for _, e := range edges {
 		if e.at > at {

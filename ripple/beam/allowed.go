@@ -30,29 +30,28 @@ func (s Spot) RippleAllowed(allowanceFW50 quantity.Length) (quantity.Voltage, er
 
 // scaleTo is the factor of the disturbance with which the disc reaches an energy.
 // The disc's square is nearly straight in that of the factor, so the root is sought
-// between squares, by false position (Illinois). The bracket starts from two simple
-// rules, that the discs add in squares, which is the most they do, and that the
-// disturbance counts alone, and is widened where they do not hold.
+// between squares, by false position (Illinois). Two discs are known, without the
+// disturbance and with it as it is; where that falls short, the bracket goes on to where
+// the disturbance would do alone, and further where that does not hold.
 func (s Spot) scaleTo(disc float64) (float64, error) {
-	source, ripple := float64(s.Source.DiscFW50()), float64(s.Disturbance.Energies.DiscFW50())
+	source := float64(s.Source.DiscFW50())
 	if quantity.AtMost(disc, source) {
 		return 0, nil
 	}
+	over := func(energies float64) float64 { return (energies/disc - 1) * (energies/disc + 1) }
 	excess := func(square float64) float64 {
-		ratio := float64(Convolve(s.Source, s.Disturbance.Energies.Scaled(math.Sqrt(square))).DiscFW50()) / disc
-		return (ratio - 1) * (ratio + 1)
+		return over(float64(Convolve(s.Source, s.Disturbance.Energies.Scaled(math.Sqrt(square))).DiscFW50()))
 	}
-	low, high := (disc-source)*(disc+source)/(ripple*ripple), disc*disc/(ripple*ripple)
-	below, above := excess(low), excess(high)
-	for range widenings {
-		switch {
-		case below > 0:
-			low, high, above = low/2, low, below
-			below = excess(low)
-		case above < 0:
-			low, high, below = high, high*2, above
-			above = excess(high)
-		}
+	low, high := 0.0, 1.0
+	below, above := over(source), over(float64(s.Energies.DiscFW50()))
+	if above < 0 {
+		ripple := float64(s.Disturbance.Energies.DiscFW50())
+		low, below, high = high, above, math.Max(2, disc*disc/(ripple*ripple))
+		above = excess(high)
+	}
+	for i := 0; above < 0 && i < widenings; i++ {
+		low, below, high = high, above, high*2
+		above = excess(high)
 	}
 	return closeIn(excess, low, high, below, above)
 }
@@ -66,10 +65,7 @@ const (
 // closeIn finds the square root of the argument where a function crosses zero
 // between low, where it is below, and high, where it is above.
 func closeIn(excess func(float64) float64, low, high, below, above float64) (float64, error) {
-	switch {
-	case below > 0: // already at one in 1e12 of the disturbance's power: none is left
-		return 0, nil
-	case above < 0:
+	if above < 0 {
 		return 0, lack.Failed("no factor of the disturbance brings the spot to its allowance")
 	}
 	last := 0 // the side moved last

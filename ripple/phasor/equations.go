@@ -1,6 +1,6 @@
 package phasor
 
-import "math/cmplx"
+import "math"
 
 // equations are linear equations in complex numbers. A row or column below zero is
 // ground, which has neither.
@@ -12,8 +12,9 @@ type equations struct {
 
 func newEquations(n int) *equations {
 	e := &equations{a: make([][]complex128, n), b: make([]complex128, n), gross: make([]float64, n)}
+	whole := make([]complex128, n*n)
 	for i := range e.a {
-		e.a[i] = make([]complex128, n)
+		e.a[i] = whole[i*n : (i+1)*n]
 	}
 	return e
 }
@@ -21,7 +22,7 @@ func newEquations(n int) *equations {
 func (e *equations) add(row, column int, y complex128) {
 	if row >= 0 && column >= 0 {
 		e.a[row][column] += y
-		e.gross[row] += cmplx.Abs(y)
+		e.gross[row] += coarse(y)
 	}
 }
 
@@ -39,7 +40,7 @@ func (e *equations) solve() ([]complex128, bool) {
 	for k := range n {
 		p := e.pivot(k)
 		e.a[k], e.a[p], e.b[k], e.b[p] = e.a[p], e.a[k], e.b[p], e.b[k]
-		if cmplx.Abs(e.a[k][k]) < 1e-14 {
+		if coarse(e.a[k][k]) < 1e-14 {
 			return nil, false
 		}
 		for i := k + 1; i < n; i++ {
@@ -84,9 +85,12 @@ func (e *equations) scale() {
 func (e *equations) pivot(k int) int {
 	best := k
 	for i := k + 1; i < len(e.a); i++ {
-		if cmplx.Abs(e.a[i][k]) > cmplx.Abs(e.a[best][k]) {
+		if coarse(e.a[i][k]) > coarse(e.a[best][k]) {
 			best = i
 		}
 	}
 	return best
 }
+
+// coarse is near enough to the magnitude, and cheap.
+func coarse(z complex128) float64 { return math.Abs(real(z)) + math.Abs(imag(z)) }

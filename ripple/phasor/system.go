@@ -34,6 +34,7 @@ type spot struct {
 
 // collect turns elements and excitation into transfers and joints.
 func (s *system) collect() error {
+	s.transfers = make([]transfer, 0, len(s.circuit.Elements)+len(s.excitation.Extra))
 	s.spots = make([]spot, s.circuit.Nodes())
 	for n := range s.spots {
 		s.spots[n].joint = circuit.Node(n)

@@ -47,6 +47,13 @@ func (e *Evidence) Optics() (beam.Optics, error) {
 
 // Source is the energy distribution of the source: measured, else that of a hot cathode.
 func (e *Evidence) Source() (beam.Distribution, error) {
+	if b := e.before; b != nil && b.chain.Beam == e.chain.Beam && b.chain.Gun == e.chain.Gun {
+		return b.Source()
+	}
+	return remember(e.Under(Condition{}), "source", e.source)
+}
+
+func (e *Evidence) source() (beam.Distribution, error) {
 	b, g := e.chain.Beam, e.chain.Gun
 	if b != nil && b.EnergyWidth.Set() {
 		return beam.GaussianFWHM(b.EnergyWidth.V)

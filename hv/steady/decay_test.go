@@ -211,6 +211,20 @@ func TestCapacitorLeftBetweenDischargedNodes(t *testing.T) {
 	near(t, "capacitor", float64(must(all[0].Lasts())), 20*math.Log(100.0/60), 1e-3)
 }
 
+// A tap that nothing permanent leads to holds no charge: it shows nothing.
+func TestTapWithoutPathShowsNothing(t *testing.T) {
+	described := supplyOf("negative", 2, 1e-9)
+	described.Bleeders = []chain.Bleeder{bleeder("output", 1e9)}
+	described.Divider = dividerOf(1e9, 100e3, 0)
+	c := build(described)
+	from := noLoad(c, 2, 1000)
+	n, _ := c.Node("divider.tap")
+	from[n] = -0.4
+	if e := must(must(Discharge(c, from, volts60)).Node("divider.tap")); e.Start != -0.4 || e.Rest != 0 {
+		t.Errorf("%+v", e)
+	}
+}
+
 // A node can rise again: what counts is the last time it is above the limit. Here the
 // filter capacitor is empty at first and is filled through its resistor.
 func TestLastTimeCounts(t *testing.T) {

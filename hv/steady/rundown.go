@@ -164,6 +164,11 @@ func (r *rundown) weave() {
 	for _, row := range []*[]float64{&r.start, &r.fed, &r.current, &r.v, &r.change[0], &r.change[1], &r.change[2]} {
 		*row = make([]float64, joints)
 	}
+	for j, c := range r.held.sum {
+		if c == 0 {
+			r.state[j] = 0 // holds no charge: where nothing leads to it, it shows nothing
+		}
+	}
 	r.most = r.highest()
 }
 

@@ -1,8 +1,6 @@
 package steady
 
 import (
-	"math"
-
 	"kilovet/hv/circuit"
 	"kilovet/hv/lack"
 	"kilovet/hv/quantity"
@@ -15,16 +13,18 @@ type Decay struct {
 	Times []quantity.Time
 	Work  Work
 
-	circuit *circuit.Circuit
-	history []Voltages      // by time
-	idle    map[string]bool // diodes that never carried anything
+	circuit  *circuit.Circuit
+	history  []Voltages      // by time
+	arrivals []arrival       // by time
+	idle     map[string]bool // diodes that never carried anything
 }
 
 // Discharge follows a circuit from the given potentials after all sources are
 // switched off, heater and gun cold: of resistors only the permanent ones count, all
 // capacitors do, diodes conduct forward without drop and block otherwise, leakage
 // never counts, sources and inductors are connections, gaps are open. It ends when
-// nothing moves any more; times are good to a part in a thousand.
+// nothing moves any more; times are good to a part in a thousand, to a hundredth where it
+// hangs on little which of two diodes conducts first.
 //
 // Errors: a lack for a doubted capacitance or a resistor without a value.
 func Discharge(c *circuit.Circuit, from Voltages, limit quantity.Voltage) (*Decay, error) {
@@ -37,11 +37,12 @@ func discharge(c *circuit.Circuit, from Voltages, limit quantity.Voltage, tolera
 	if err != nil {
 		return nil, err
 	}
-	d := &Decay{Limit: limit, circuit: bare, Times: []quantity.Time{0}, history: []Voltages{from}}
+	d := &Decay{Limit: limit, circuit: bare, Times: []quantity.Time{0}, history: []Voltages{from}, arrivals: make([]arrival, 1)}
 	p := pace{tolerance: tolerance, floor: 0.1 * float64(limit), done: 1e-3 * float64(limit)}
 	err = r.run(p, func(t float64) {
 		d.Times = append(d.Times, quantity.Time(t))
 		d.history = append(d.history, r.potentials())
+		d.arrivals = append(d.arrivals, r.arrival())
 	})
 	d.Work, d.idle = r.work, r.idle()
 	return d, err
@@ -173,18 +174,4 @@ func (d *Decay) ending(of string, voltage func(Voltages) quantity.Voltage) Endin
 		e.Time = d.crossing(i, voltage)
 	}
 	return e
-}
-
-// crossing is when the voltage falls to the limit between two times, as an
-// exponential, or as a line where it changes its sign.
-func (d *Decay) crossing(i int, voltage func(Voltages) quantity.Voltage) quantity.Time {
-	a, b, limit := float64(voltage(d.history[i])), float64(voltage(d.history[i+1])), float64(d.Limit)
-	if a < 0 {
-		a, b = -a, -b
-	}
-	share := (a - limit) / (a - b)
-	if b > limit/2 {
-		share = math.Log(a/limit) / math.Log(a/b)
-	}
-	return d.Times[i] + quantity.Time(share)*(d.Times[i+1]-d.Times[i])
 }

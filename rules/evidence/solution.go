@@ -34,8 +34,8 @@ func (e *Evidence) solution() (periodic, error) {
 				near = beside{from: t.state} // of this circuit at more drive than there is
 			}
 		}
-		if same, ok := e.unchanged(); ok {
-			return same, nil
+		if own, same := e.itself(); same {
+			return own.solution()
 		}
 		return e.solve(c, near, swift)
 	})
@@ -47,20 +47,15 @@ func (e *Evidence) holds() bool {
 	return e.condition.Peak == 0 && e.chain.Regulation != nil && e.condition.State != Lost && (share == 0 || share == 1)
 }
 
-// unchanged is the state of the whole chain by itself, where the drive is set by hand to
-// what it is anyway.
-func (e *Evidence) unchanged() (periodic, bool) {
+// itself is the chain in its state, where the drive is set by hand to what it is there anyway.
+func (e *Evidence) itself() (*Evidence, bool) {
 	c := e.condition
 	if c.Peak == 0 || c.Corner != Nominal || c.Fault.Name != "" || c.Drive != 0 && c.Drive != 1 {
-		return periodic{}, false
+		return nil, false
 	}
 	own := e.Under(Condition{State: c.State})
 	peak, err := own.Peak()
-	if err != nil || !quantity.Equal(peak, c.Peak) {
-		return periodic{}, false
-	}
-	s, err := own.solution()
-	return s, err == nil
+	return own, err == nil && quantity.Equal(peak, c.Peak)
 }
 
 // Network is the steady state in time, for wave-forms and what else is not asked often.

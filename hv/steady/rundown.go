@@ -35,6 +35,7 @@ type rundown struct {
 	least   float64 // of the largest capacitor voltage: of those between joints of fixed distance
 	most    float64 // largest capacitor voltage
 	next    float64 // the same at the end of the step tried
+	first   float64 // s: length of the first step
 	diode   float64 // ohm, common to all diodes that conduct; zero for ideal ones
 	gOn     float64 // of a conducting diode
 	lost    bool    // the diodes did not settle
@@ -93,7 +94,7 @@ func runDown(c *circuit.Circuit, from Voltages, given []tie) (*rundown, error) {
 	if err != nil {
 		return nil, err
 	}
-	r := &rundown{net: net, state: net.joined(from)}
+	r := &rundown{net: net, state: net.joined(from), first: firstStep}
 	for i := range c.Elements {
 		if err := r.add(&c.Elements[i], from); err != nil {
 			return nil, err

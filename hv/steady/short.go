@@ -46,6 +46,7 @@ func Short(c *circuit.Circuit, from Voltages, node string) (Delivered, error) {
 		return Delivered{}, nil
 	}
 	r.diode = r.smallDiode()
+	r.first = r.quick()
 	return r.deliver(group)
 }
 
@@ -64,6 +65,18 @@ func (r *rundown) smallDiode() float64 {
 		most = math.Max(most, w.g)
 	}
 	return math.Min(1, 1e-3/most)
+}
+
+// quick is a first step well below the time in which a diode that conducts empties the
+// smallest capacitor: what happens meanwhile is not followed.
+func (r *rundown) quick() float64 {
+	least := math.Inf(1)
+	for i := range r.stores {
+		if c := r.stores[i].c; c > 0 {
+			least = math.Min(least, c)
+		}
+	}
+	return math.Min(firstStep, 1e-2*r.diode*least)
 }
 
 // quiet are the sources as connections; those of a fixed bias keep their voltage

@@ -28,10 +28,10 @@ var weights = [stages][stages]float64{
 var share = [stages]float64{weights[2][0], weights[2][1], gamma}
 
 const (
-	firstStep = 1e-12         // s: shorter than any time constant of a chain
-	horizon   = 1e12          // s: what has not happened by then never will
-	shortest  = firstStep / 5 // below which a step is taken whatever it is wrong by
-	growth    = 20            // at most from one step to the next
+	firstStep = 1e-12   // s: shorter than any time constant of a chain with ideal diodes
+	horizon   = 1e12    // s: what has not happened by then never will
+	shortest  = 1.0 / 5 // of the first step: below that a step is taken whatever it is wrong by
+	growth    = 20      // at most from one step to the next
 )
 
 // pace says how closely a run is followed.
@@ -46,9 +46,9 @@ type pace struct {
 func (r *rundown) run(p pace, see func(t float64)) error {
 	r.jump()
 	see(0)
-	for t, h, longer := 0.0, firstStep, float64(growth); t < horizon && r.most > p.done; {
+	for t, h, longer := 0.0, r.first, float64(growth); t < horizon && r.most > p.done; {
 		strain := r.step(h, p)
-		if strain > 1 && h > shortest {
+		if strain > 1 && h > shortest*r.first {
 			h *= math.Max(0.2, 0.8/math.Cbrt(strain))
 			longer = 1 // what refused this step refuses the next long one as well
 			continue
@@ -71,7 +71,7 @@ func (r *rundown) run(p pace, see func(t float64)) error {
 // jump lets capacitors in ideal loops share their charge, through diodes too, which
 // takes no time; a second time for what the diodes held back at first.
 func (r *rundown) jump() {
-	const instant = 1e-3 * firstStep
+	instant := 1e-3 * r.first
 	r.prepare(instant)
 	copy(r.v, r.state)
 	for again := range 2 {

@@ -16,11 +16,8 @@ type krylov struct {
 	scratch []float64
 }
 
-// mostVectors is the size of the largest basis.
-const mostVectors = 80
-
 func newKrylov(n int) *krylov {
-	m := min(n, mostVectors)
+	m := min(n, 80)
 	return &krylov{n: n, most: m, basis: rows(m+1, n), h: rows(m, m+1),
 		cos: make([]float64, m), sin: make([]float64, m), g: make([]float64, m+1), scratch: make([]float64, n)}
 }

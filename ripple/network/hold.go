@@ -37,6 +37,7 @@ func Seek(o HoldOptions) (quantity.Voltage, *Periodic, error) {
 	if err != nil {
 		return 0, nil, err
 	}
+	o.walking = true // those who have another way ask about faults
 	return o.together(1500 + 30*len(c.Elements))
 }
 
@@ -60,6 +61,9 @@ func (o *HoldOptions) together(most int) (quantity.Voltage, *Periodic, error) {
 	}
 	h := newSearch(newShooter(s))
 	h.swift = o.Swift
+	if o.walking {
+		h.slight = 0
+	}
 	if most > 0 {
 		h.most = most
 	}

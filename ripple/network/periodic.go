@@ -21,11 +21,10 @@ type Periodic struct {
 	// Assumptions are what was assumed beyond the description, in plain words.
 	Assumptions []string
 
-	track   *track
-	swings  swings
-	peaks   []float64 // potentials at the peaks of the guess, no diode pressed
-	lessons []lesson  // of the search
-	trust   float64   // what the mean changed by over what it was to, where it was held; else zero
+	track  *track
+	swings swings
+	peaks  []float64 // potentials at the peaks of the guess, no diode pressed
+	trust  float64   // what the mean changed by over what it was to, where it was held; else zero
 }
 
 // periodic takes the state out of the shooter.

@@ -44,16 +44,10 @@ func back(y1, y2, y3 float64) float64 {
 	return l1*y1 + l2*y2 + l3*y3
 }
 
-// stageOf is the numerator of R_j(z) of stage j for a scalar z.
+// stageOf is R_j(z) of stage j for a scalar z.
 func stageOf(c float64, z complex128) complex128 {
-	return 60 + complex(60*c-36, 0)*z + complex(30*c*c-36*c+9, 0)*z*z
-}
-
-// over is one over the denominator of R(z), (p₁ − z)(p₂ − z)(p₃ − z) by its poles.
-func over(z complex128) complex128 {
-	d := 60 + z*(-36+z*(9-z))
-	m := 1 / (real(d)*real(d) + imag(d)*imag(d))
-	return complex(real(d)*m, -imag(d)*m)
+	n := 60 + complex(60*c-36, 0)*z + complex(30*c*c-36*c+9, 0)*z*z
+	return n / (60 + z*(-36+z*(9-z)))
 }
 
 // exact is the argument for which the method turns a phasor by an angle exactly,
@@ -61,7 +55,7 @@ func over(z complex128) complex128 {
 func exact(angle float64) complex128 {
 	z := complex(0, angle)
 	sin, cos := math.Sincos(angle)
-	return z + 1 - stageOf(1, z)*over(z)*complex(cos, -sin)
+	return z + 1 - stageOf(1, z)*complex(cos, -sin)
 }
 
 // cubic is a polynomial in the part θ of a step, lowest power first.

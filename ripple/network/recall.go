@@ -1,7 +1,5 @@
 package network
 
-import "slices"
-
 // recall makes a preconditioner better by what earlier solutions of nearly the same
 // equations have learnt (recycling of a Krylov space: Parks, de Sturler, Mackey, Johnson
 // and Maiti, SIAM J. Sci. Comput. 28 (2006) 1651; here one lesson a solution, each of the
@@ -49,21 +47,13 @@ func (r *recall) learn(s *krylov) {
 	}
 	l.cos, l.sin = append(l.cos, s.cos[:k]...), append(l.sin, s.sin[:k]...)
 	r.lessons = append(r.lessons, l)
-}
-
-// start takes over what the search for a similar state has learnt.
-func (r *recall) start(lessons []lesson) {
-	r.lessons, r.vectors = slices.Clip(lessons), 0
-	for i := range lessons {
-		r.vectors += len(lessons[i].triangle)
+	if r.c == nil {
+		r.c, r.y = make([]float64, s.most+1), make([]float64, s.most)
 	}
 }
 
 // improve goes before the preconditioner.
 func (r *recall) improve(x []float64) {
-	if r.c == nil {
-		r.c, r.y = make([]float64, mostVectors+1), make([]float64, mostVectors)
-	}
 	for i := len(r.lessons) - 1; i >= 0; i-- {
 		r.lessons[i].improve(x, r.c, r.y)
 	}

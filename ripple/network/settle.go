@@ -31,6 +31,7 @@ const mostSettling = 8
 // draws none. The error is that of Steady.
 func Settle(c *circuit.Circuit, failed Failed, o Options) (Settled, error) {
 	var s Settled
+	o.walking = true // what is cut off or shorted switches in bursts that nothing is carried through
 	c, s.Ended = fed(c)
 	r := reacher{failed: failed.Part, dead: failed.Ladder && len(s.Ended) > 0}
 	r.taxing = r.taxed(o.From)

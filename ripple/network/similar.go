@@ -45,9 +45,6 @@ func (o *similar) corrections() map[string]float64 {
 // be corrected, capacitor by capacitor: that changes little where the drive, a load
 // or a value does.
 func (s *search) startFrom(o *similar) {
-	if before := o.state.track; before.states() == s.states() && len(before.diodes) == len(s.diodes) {
-		s.recall.start(o.state.lessons)
-	}
 	s.aimBeside(o.state)
 	correction, guess := o.corrections(), s.guessed()
 	for k := range s.q {

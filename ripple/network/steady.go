@@ -29,6 +29,7 @@ type Options struct {
 	Swift bool
 
 	creeping bool // creep first: Newton's method is known to go astray
+	walking  bool // walk a period again after its last correction, however slight
 
 	work *Work // adds up what searches cost, given up or not
 }
@@ -50,6 +51,9 @@ func Steady(c *circuit.Circuit, o Options) (*Periodic, error) {
 	}
 	h := newSearch(newShooter(s))
 	h.swift, h.creeping = o.Swift, o.creeping
+	if o.walking {
+		h.slight = 0
+	}
 	if o.Most > 0 {
 		h.most = o.Most
 	}
@@ -153,7 +157,6 @@ func (s *search) pass(from *similar) (*Periodic, error) {
 		return nil, err
 	}
 	p := s.periodic()
-	p.lessons = s.recall.lessons
 	p.Uncertainty = from.state.Uncertainty
 	if err := p.plausible(); err != nil {
 		return p, err
@@ -193,7 +196,6 @@ func (s *search) refine() (*Periodic, error) {
 		return nil, err
 	}
 	p := s.periodic()
-	p.lessons = s.recall.lessons
 	after := append([]float64(nil), s.x...)
 	s.returnTo(&before)
 	p.Uncertainty = quantity.Voltage(s.apart(s.x, after))

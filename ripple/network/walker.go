@@ -93,15 +93,14 @@ func (w *walker) try(h float64) {
 // turn carries the sine through the step: seen at the poles and at the stages.
 func (w *walker) turn(h float64) {
 	z := exact(w.omega * h)
-	all := over(z) * w.wave
 	w.sine[0] = imag(w.wave)
 	for j, c := range [3]float64{node1, node2, 1} {
-		w.next = stageOf(c, z) * all
+		w.next = stageOf(c, z) * w.wave
 		w.sine[j+1] = imag(w.next)
 	}
-	r, upper, lower := poleR-z, complex(poleA, poleB)-z, complex(poleA, -poleB)-z
-	w.poleR = imag(upper * lower * all) // of wave/(poleR − z)
-	w.poleLow = (r*lower*all - cmplx.Conj(r*upper*all)) * -0.5i
+	w.poleR = imag(w.wave / (poleR - z))
+	p := complex(poleA, poleB)
+	w.poleLow = (w.wave/(p-z) - cmplx.Conj(w.wave)/(p-cmplx.Conj(z))) / 2i
 }
 
 // fill sets up p C + h G + h²/(p L) in the three lanes.

@@ -134,6 +134,25 @@ func TestShortsScale(t *testing.T) {
 	}
 }
 
+// What a short delivers does not rest on how quick the chain is: with resistances a
+// thousandth as large, those of the diodes among them, all happens a thousand times as fast
+// and the same charge passes (derived), though stray capacitors then share theirs in less
+// than the shortest step that ideal diodes ask for.
+func TestShortsOfAQuickChain(t *testing.T) {
+	of := func(ohms quantity.Resistance, node string) Delivered {
+		described := supplyOf("positive", 6, 20e-12)
+		described.Multiplier.StrayToGround = given("s", quantity.Capacitance(1e-12))
+		described.Filters = []chain.Filter{{Resistor: resistor("r", ohms), Capacitor: capacitor(10e-12)}}
+		c := build(described)
+		return must(Short(c, noLoad(c, 6, 1000), node))
+	}
+	for _, node := range []string{"coupling.1", "coupling.3", "stage.2", "output"} {
+		slow, quick := of(1000, node), of(1, node)
+		near(t, node+": charge", float64(quick.Charge), float64(slow.Charge), 5e-4)
+		near(t, node+": energy", float64(quick.Energy), float64(slow.Energy), 5e-4)
+	}
+}
+
 func TestStoresNameTheirParts(t *testing.T) {
 	c := build(supplyOf("negative", 2, 1e-9))
 	stores := Stores(c, noLoad(c, 2, 1000))

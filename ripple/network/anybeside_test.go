@@ -45,8 +45,8 @@ func foundSwiftly(t *rapid.T, c *circuit.Circuit, near *Periodic, slight float64
 	if err != nil {
 		t.Fatal(err)
 	}
-	h := newSearch(newShooter(s))
-	h.swift, h.slight = true, slight
+	h := o.search(s)
+	h.slight = slight
 	return h.solve(o.similar())
 }
 

@@ -101,3 +101,38 @@ func TestHoldBesideAKnownState(t *testing.T) {
 		t.Errorf("%d periods", p.Work.Periods)
 	}
 }
+
+// What one circuit's change made of the charges is foreseen of the same change of another: at
+// half the drive a corner is found in fewer periods from the states at the whole, and is the
+// same.
+func TestAChangeIsForeseen(t *testing.T) {
+	whole := steady(t, build(t, examples()["6 stages with filter and bias"]))
+	at := func(p *Periodic, drive quantity.Voltage) *circuit.Circuit {
+		return p.Circuit.Each(func(e *circuit.Element) bool {
+			if e.Kind == circuit.Source {
+				e.Wave.Amplitude *= drive
+			}
+			return true
+		})
+	}
+	corner := steady(t, neighbours(whole.Circuit)["capacitors"])
+	half := steady(t, at(whole, 0.5))
+	sought := at(corner, 0.5)
+	exact := steady(t, sought)
+	plain, err := Steady(sought, Options{From: half, Swift: true})
+	if err != nil {
+		t.Fatal(err)
+	}
+	foreseen, err := Steady(sought, Options{From: half, Before: whole, After: corner, Swift: true})
+	if err != nil {
+		t.Fatal(err)
+	}
+	if foreseen.Work.Periods >= plain.Work.Periods {
+		t.Errorf("%d periods, %d where nothing is foreseen", foreseen.Work.Periods, plain.Work.Periods)
+	}
+	top := node(t, sought, "multiplier")
+	a, _ := exact.At(top)
+	b, _ := foreseen.At(top)
+	alike(t, "mean", float64(b.Mean), float64(a.Mean), 1e-6)
+	alike(t, "ripple", float64(b.PeakToPeak()), float64(a.PeakToPeak()), 1e-4)
+}

@@ -36,14 +36,15 @@
 // SIAM J. Numer. Anal. 35 (1998) 508), or the search starts anew. Where the drive is to hold
 // a voltage both are sought together: after each correction the drive is changed by what
 // the voltage lacks, and the state by what that does to the circuit between the peaks. A
-// search that starts from a similar circuit expects that loads take the same charges, for each
-// volt of the drive. The
-// step control makes the period a continuous function of its start, so that the charges
-// come back to 1e-8 of what a diode passes, at worst to 3e-7, and to 1e-5 where no more is
-// asked for (Options.Swift). Work is bounded; what is not reached is a lack. The network is
-// passive and monotonic: the state is unique wherever something discharges it. Where
-// nothing does, it depends on history, and the state that a vanishing leakage of the
-// diodes would leave is given: a ladder that was once higher stays higher.
+// search that starts from a similar circuit expects that loads take the same charges, for
+// each volt of the drive. The step control makes the period a continuous function of its
+// start, so that the charges come back to 1e-8 of what a diode passes, at worst to 3e-7, and
+// to 1e-5 where no more is asked for (Options.Swift): then a last slight correction is carried
+// through the period, the instants of switching moved with it, and the period not walked
+// again. Work is bounded; what is not reached is a lack. The network is passive and
+// monotonic: the state is unique wherever something discharges it. Where nothing does, it
+// depends on history, and the state that a vanishing leakage of the diodes would leave is
+// given: a ladder that was once higher stays higher.
 //
 // Errors: two grades of mesh are solved, every bound of the steps tighter in the
 // finer; their difference is reported. A swift state near one that is known is solved in

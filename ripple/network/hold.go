@@ -59,11 +59,7 @@ func (o *HoldOptions) together(most int) (quantity.Voltage, *Periodic, error) {
 	if !there || s.frame.loose[n] {
 		return 0, nil, lack.Failed("there is no node %s that is tied to ground", o.Node)
 	}
-	h := newSearch(newShooter(s))
-	h.swift = o.Swift
-	if o.walking {
-		h.slight = 0
-	}
+	h := o.search(s)
 	if most > 0 {
 		h.most = most
 	}

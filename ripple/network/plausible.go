@@ -27,10 +27,3 @@ func (p *Periodic) plausible() error {
 	}
 	return nil
 }
-
-func abs(x float64) float64 {
-	if x < 0 {
-		return -x
-	}
-	return x
-}

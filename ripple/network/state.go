@@ -45,6 +45,13 @@ func (s *system) unpack(x, scale, q, amps []float64) {
 
 func norm(x []float64) float64 { return math.Sqrt(dot(x, x)) }
 
+func abs(x float64) float64 {
+	if x < 0 {
+		return -x
+	}
+	return x
+}
+
 func largest(x []float64) float64 {
 	m := 0.0
 	for _, v := range x {

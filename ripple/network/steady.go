@@ -49,11 +49,7 @@ func Steady(c *circuit.Circuit, o Options) (*Periodic, error) {
 	if err != nil {
 		return nil, err
 	}
-	h := newSearch(newShooter(s))
-	h.swift, h.creeping = o.Swift, o.creeping
-	if o.walking {
-		h.slight = 0
-	}
+	h := o.search(s)
 	if o.Most > 0 {
 		h.most = o.Most
 	}
@@ -61,6 +57,16 @@ func Steady(c *circuit.Circuit, o Options) (*Periodic, error) {
 		defer func() { o.work.add(h.pace.work) }()
 	}
 	return h.solve(o.similar())
+}
+
+// search sets up a search as the options ask for it.
+func (o *Options) search(s *system) *search {
+	h := newSearch(newShooter(s))
+	h.swift, h.creeping = o.Swift, o.creeping
+	if o.walking {
+		h.slight = 0
+	}
+	return h
 }
 
 // compile sets up the equations of a circuit.

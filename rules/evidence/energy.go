@@ -156,13 +156,13 @@ func (e *Evidence) TouchCurrent(node string) (quantity.Current, error) {
 		if err != nil {
 			return 0, err
 		}
-		f, err := p.Through(body)
+		f, err := p.Through(bodyName)
 		return f.Peak, err
 	})
 }
 
-// body is the element through which a touch current is measured.
-const body = "measuring resistor"
+// bodyName is the element through which a touch current is measured, which stands for a body.
+const bodyName = "measuring resistor"
 
 // measured is the state with the measuring resistor from a node to ground.
 func (e *Evidence) measured(node string) (periodic, error) {
@@ -171,7 +171,7 @@ func (e *Evidence) measured(node string) (periodic, error) {
 		if err != nil {
 			return periodic{}, err
 		}
-		return e.solve(c.Bridge(body, node, "ground", measuring), e.untouched(c, node), true)
+		return e.solve(c.Bridge(bodyName, node, "ground", measuring), e.untouched(c, node), true)
 	})
 }
 

@@ -19,8 +19,9 @@ func curved() *page.Document {
 // the file is the one that is had by drawing each when its turn comes.
 func TestCurvesAreDrawnAhead(t *testing.T) {
 	d := curved()
-	curves := foresee(d, testPen(), a4)
-	w, empty := prepared(testFonts(t), testPen(), curves, A4, d)
+	press := readyPress(t)
+	curves := foresee(d, press.beside, a4)
+	w := press.laidOut(curves, d)
 	drawn := 0
 	for wanted := range w.drawn {
 		if wanted.curve == nil {
@@ -34,12 +35,21 @@ func TestCurvesAreDrawnAhead(t *testing.T) {
 	if drawn < 4 || drawn != len(curves.order) {
 		t.Errorf("%d curves stand on the sheets, %d were drawn ahead", drawn, len(curves.order))
 	}
-	f := testFonts(t)
-	ahead, err := painted(w, empty, d.Block)
-	now, err2 := painted(layout(f, a4, testPen(), nil, d), blank(A4, d.Block, f.names(d.Block)), d.Block)
+	ahead, err := press.printed(w, d.Block)
+	now, err2 := readyPress(t).printed(layout(testFonts(t), a4, testPen(), nil, d), d.Block)
 	if err != nil || err2 != nil || !bytes.Equal(ahead, now) {
 		t.Errorf("%d bytes drawn ahead (%v), %d drawn in turn (%v), not the same", len(ahead), err, len(now), err2)
 	}
+}
+
+// readyPress has been set up.
+func readyPress(t *testing.T) *Press {
+	t.Helper()
+	p := Begin(A4)
+	if <-p.ready; p.err != nil {
+		t.Fatal(p.err)
+	}
+	return p
 }
 
 // A pen that breaks leaves nobody waiting.

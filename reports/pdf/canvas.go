@@ -86,11 +86,10 @@ func (c *canvas) Stroke(p vg.Path) {
 		return
 	}
 	size := c.now.size()
-	r, g, b := rgb(c.now.ink)
-	c.out.SetDrawColor(r, g, b)
-	c.out.SetLineWidth(float64(c.now.width/vg.Millimeter) * size)
-	c.out.SetDashPattern(dashes(c.now.dash, size), float64(c.now.offset/vg.Millimeter)*size)
-	c.path(p, "S")
+	c.out.stroke(inkOf(c.now.ink))
+	c.out.wide(float64(c.now.width/vg.Millimeter) * size)
+	c.out.dashed(dashes(c.now.dash, size), float64(c.now.offset/vg.Millimeter)*size)
+	c.path(p, "S\n")
 }
 
 func dashes(pattern []vg.Length, size float64) []float64 {
@@ -102,41 +101,38 @@ func dashes(pattern []vg.Length, size float64) []float64 {
 }
 
 func (c *canvas) Fill(p vg.Path) {
-	r, g, b := rgb(c.now.ink)
-	c.out.SetFillColor(r, g, b)
-	c.path(p, "f")
+	c.out.fill(inkOf(c.now.ink))
+	c.path(p, "f\n")
 }
 
-func rgb(ink color.Color) (r, g, b int) {
-	if ink == nil {
-		return 0, 0, 0
-	}
-	red, green, blue, _ := ink.RGBA()
-	return int(red >> 8), int(green >> 8), int(blue >> 8)
-}
-
-// path writes a path, whose places are checked first, and how it is drawn.
+// path writes a path and how it is drawn.
 func (c *canvas) path(p vg.Path, how string) {
-	line := c.out.line[:0]
 	for _, s := range p {
 		switch s.Type {
 		case vg.MoveComp:
-			x, y := c.place(s.Pos)
-			line = append(c.out.places(line, 2, x, y), "m\n"...)
+			c.to(s.Pos)
+			c.out.put("m\n")
 		case vg.LineComp:
-			x, y := c.place(s.Pos)
-			line = append(c.out.places(line, 2, x, y), "l\n"...)
+			c.to(s.Pos)
+			c.out.put("l\n")
 		case vg.CurveComp:
-			line = c.curve(line, s)
+			c.curve(s)
 		case vg.ArcComp:
-			line = c.arc(line, s)
+			c.arc(s)
 		case vg.CloseComp:
-			line = append(line, "h\n"...)
+			c.out.put("h\n")
 		}
 	}
-	c.out.put(append(line, how...))
+	c.out.put(how)
 }
 
+// to writes a place.
+func (c *canvas) to(p vg.Point) {
+	x, y := c.place(p)
+	c.out.at(x, y)
+}
+
+// place is where a point lies on the sheet; one that lies nowhere is refused.
 func (c *canvas) place(p vg.Point) (x, y float64) {
 	x, y = c.now.at(p)
 	if math.IsNaN(x) || math.IsNaN(y) || math.Abs(x) > 1e4 || math.Abs(y) > 1e4 {
@@ -146,19 +142,21 @@ func (c *canvas) place(p vg.Point) (x, y float64) {
 	return x, y
 }
 
-func (c *canvas) curve(line []byte, s vg.PathComp) []byte {
-	x, y := c.place(s.Pos)
-	cx, cy := c.place(s.Control[0])
-	if len(s.Control) == 1 {
-		return append(c.out.places(line, 5, cx, cy, x, y), "v\n"...)
+func (c *canvas) curve(s vg.PathComp) {
+	for _, p := range s.Control {
+		c.to(p)
 	}
-	dx, dy := c.place(s.Control[1])
-	return append(c.out.places(line, 5, cx, cy, dx, dy, x, y), "c\n"...)
+	c.to(s.Pos)
+	if len(s.Control) == 1 {
+		c.out.put("v\n")
+		return
+	}
+	c.out.put("c\n")
 }
 
 // arc draws an arc as cubic curves of at most a quarter turn each, which stay within
 // 3e-4 of its radius.
-func (c *canvas) arc(line []byte, s vg.PathComp) []byte {
+func (c *canvas) arc(s vg.PathComp) {
 	pieces := max(1, int(math.Ceil(math.Abs(s.Angle)/(math.Pi/2)-1e-9)))
 	step := s.Angle / float64(pieces)
 	k := vg.Length(4.0 / 3 * math.Tan(step/4))
@@ -168,12 +166,11 @@ func (c *canvas) arc(line []byte, s vg.PathComp) []byte {
 		sin2, cos2 := math.Sincos(to)
 		p := s.Pos.Add(vg.Point{X: s.Radius * vg.Length(cos), Y: s.Radius * vg.Length(sin)})
 		q := s.Pos.Add(vg.Point{X: s.Radius * vg.Length(cos2), Y: s.Radius * vg.Length(sin2)})
-		line = c.curve(line, vg.PathComp{Pos: q, Control: []vg.Point{
+		c.curve(vg.PathComp{Pos: q, Control: []vg.Point{
 			p.Add(vg.Point{X: -k * s.Radius * vg.Length(sin), Y: k * s.Radius * vg.Length(cos)}),
 			q.Add(vg.Point{X: k * s.Radius * vg.Length(sin2), Y: -k * s.Radius * vg.Length(cos2)}),
 		}})
 	}
-	return line
 }
 
 // FillString writes a text; that it is turned is known from the matrix.
@@ -183,17 +180,13 @@ func (c *canvas) FillString(f font.Face, p vg.Point, text string) {
 	if f.Font.Weight >= xfont.WeightBold {
 		cut = bold
 	}
-	r, g, b := rgb(c.now.ink)
-	c.out.write(r, g, b)
+	c.out.fill(inkOf(c.now.ink))
 	c.out.letters(cut, float64(f.Font.Size/vg.Points(1))*c.now.size())
 	text = c.out.fonts.guard(cut, text)
-	angle := -math.Atan2(c.now.b, c.now.a) * 180 / math.Pi
+	angle := -math.Atan2(c.now.b, c.now.a)
 	if math.Abs(angle) < 1e-9 {
-		c.out.Text(x, y, text)
+		c.out.text(x, y, text)
 		return
 	}
-	c.out.TransformBegin()
-	c.out.TransformRotate(angle, x, y)
-	c.out.Text(x, y, text)
-	c.out.TransformEnd()
+	c.out.turned(x, y, angle, func() { c.out.text(x, y, text) })
 }

@@ -3,6 +3,7 @@ package pdf
 import (
 	"fmt"
 	"strings"
+	"sync"
 	"unicode/utf8"
 
 	"codeberg.org/go-fonts/dejavu/dejavusans"
@@ -33,6 +34,7 @@ type fonts struct {
 	widths [2]map[rune]float64 // in em; absent glyphs are negative
 	plain  [2][128]float64     // the same of the first runes; of those that are no letters nought
 	buffer sfnt.Buffer
+	lock   sync.Mutex // of widths and buffer, which all painters ask for
 
 	wrapped map[wanted][]set
 }
@@ -81,6 +83,8 @@ func (f *fonts) em(c face, r rune) float64 {
 	if r >= ' ' && r <= '~' {
 		return f.plain[c][r]
 	}
+	f.lock.Lock()
+	defer f.lock.Unlock()
 	w, known := f.widths[c][r]
 	if !known {
 		w = f.advance(c, r)

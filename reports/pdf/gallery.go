@@ -176,6 +176,5 @@ func (p picture) numbers() []float64 { return []float64{p.x, p.y, p.scale} }
 func (p picture) draw(out *painter) {
 	c := newCanvas(out, p.x, p.y+float64(p.drawn.Height/vg.Millimeter)*p.scale, p.scale)
 	p.drawn.Draw(c)
-	out.SetDashPattern(nil, 0)
-	out.err = c.err
+	out.refuse(c.err)
 }

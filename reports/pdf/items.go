@@ -1,53 +1,21 @@
 package pdf
 
 import (
-	"errors"
 	"fmt"
 	"math"
-
-	"github.com/jung-kurt/gofpdf"
 )
 
-// sheet is what is drawn on one page, in order, in millimetres from its top left.
+// sheet is what stands on one page, in order, in millimetres from its top left.
 type sheet struct{ items []item }
 
-// item is a piece of text, a line or a box.
-type item interface {
-	draw(*painter)
-	numbers() []float64
-}
+// item is a piece of text, a line or a box, or what the file notes of the sheet.
+type item interface{ numbers() []float64 }
 
-// painter puts items into a file; it knows where links lead.
-type painter struct {
-	*gofpdf.Fpdf
-	operators
-	fonts *fonts
-	links map[string]int
-	err   error // what a picture could not draw
-	ink   [3]int
-	cut   string  // of the type that is set
-	size  float64 // in points
-}
+// seen is an item that is drawn.
+type seen interface{ draw(*painter) }
 
-// letters sets the type, once for all that has it.
-func (p *painter) letters(c face, size float64) {
-	cut := ""
-	if c == bold {
-		cut = "B"
-	}
-	if p.cut != cut || math.Abs(p.size-size) > 0 {
-		p.cut, p.size = cut, size
-		p.SetFont(family, cut, size)
-	}
-}
-
-// write sets the colour of text, once for all that has it.
-func (p *painter) write(r, g, b int) {
-	if want := [3]int{r, g, b}; p.ink != want {
-		p.ink = want
-		p.SetTextColor(r, g, b)
-	}
-}
+// noted is an item that the file notes.
+type noted interface{ note(*binding) }
 
 // written is text on a base line.
 type written struct {
@@ -59,7 +27,7 @@ type written struct {
 // stroke is a straight line.
 type stroke struct {
 	x1, y1, x2, y2, width float64
-	grey                  int
+	grey                  uint8
 }
 
 // box is a rectangle: filled black, or outlined.
@@ -79,51 +47,66 @@ func (s *sheet) lines(x, y float64, lines []set) {
 }
 
 // paint draws a sheet; a coordinate that is no number is refused.
-func paint(out *painter, s *sheet) error {
+func (p *painter) paint(s *sheet) error {
 	for _, i := range s.items {
 		for _, v := range i.numbers() {
 			if math.IsNaN(v) || math.Abs(v) > 1e4 {
 				return fmt.Errorf("%T lies nowhere", i)
 			}
 		}
-		i.draw(out)
+		if i, is := i.(seen); is {
+			i.draw(p)
+		}
 	}
-	return errors.Join(out.err, out.Error())
+	return p.err
 }
 
 func (w written) numbers() []float64 { return []float64{w.x, w.y, w.style.size} }
 
-func (w written) draw(out *painter) {
-	ink := 0
+func (w written) draw(p *painter) {
+	ink := black
 	if w.white {
-		ink = 255
+		ink = white
 	}
-	out.letters(w.style.face, w.style.size)
-	out.write(ink, ink, ink)
-	out.Text(w.x, w.y, w.text)
+	p.letters(w.style.face, w.style.size)
+	p.fill(ink)
+	p.text(w.x, w.y, w.text)
 }
 
 func (l stroke) numbers() []float64 { return []float64{l.x1, l.y1, l.x2, l.y2, l.width} }
 
-func (l stroke) draw(out *painter) {
-	out.SetDrawColor(l.grey, l.grey, l.grey)
-	out.SetLineWidth(l.width)
-	out.Line(l.x1, l.y1, l.x2, l.y2)
+func (l stroke) draw(p *painter) {
+	p.stroke(grey(l.grey))
+	p.wide(l.width)
+	p.dashed(nil, 0)
+	p.at(l.x1, l.y1)
+	p.put("m ")
+	p.at(l.x2, l.y2)
+	p.put("l S\n")
 }
 
 func (b box) numbers() []float64 { return []float64{b.x, b.y, b.w, b.h, b.width} }
 
-func (b box) draw(out *painter) {
-	out.SetDrawColor(0, 0, 0)
-	out.SetFillColor(0, 0, 0)
-	out.SetLineWidth(b.width)
-	how := "D"
+func (b box) draw(p *painter) {
+	how := "S"
 	if b.filled {
-		how = "F"
+		how = "f"
+		p.fill(black)
+	} else {
+		p.stroke(black)
+		p.wide(b.width)
+		p.dashed(b.pattern(), 0)
 	}
+	p.at(b.x, b.y)
+	p.lengths(b.w, -b.h)
+	p.put("re ")
+	p.put(how)
+	p.put("\n")
+}
+
+func (b box) pattern() []float64 {
 	if b.dashed {
-		out.SetDashPattern([]float64{1.2, 0.8}, 0)
-		defer out.SetDashPattern(nil, 0)
+		return []float64{1.2, 0.8}
 	}
-	out.Rect(b.x, b.y, b.w, b.h, how)
+	return nil
 }

@@ -45,21 +45,6 @@ func (w *flow) link(x, y float64, l set, to page.Link) {
 	w.sheet().add(jump{x: x + from, y: y, w: width, h: l.style.leading(), to: to.To})
 }
 
-// announce gives every anchor a number in the file.
-func (w *flow) announce(out *painter) {
-	for _, s := range w.sheets {
-		for _, i := range s.items {
-			j, ok := i.(jump)
-			at, there := w.anchors[j.to]
-			if _, known := out.links[j.to]; !ok || !there || known {
-				continue
-			}
-			out.links[j.to] = out.AddLink()
-			out.SetLink(out.links[j.to], max(0, at.y-2), at.sheet)
-		}
-	}
-}
-
 // resolve writes the numbers of sheets that are referred to.
 func (w *flow) resolve(s *sheet) {
 	for i, it := range s.items {
@@ -93,9 +78,9 @@ type jump struct {
 
 func (j jump) numbers() []float64 { return []float64{j.x, j.y, j.w, j.h} }
 
-func (j jump) draw(out *painter) {
-	if link, there := out.links[j.to]; there {
-		out.Link(j.x, j.y, j.w, j.h, link)
+func (j jump) note(b *binding) {
+	if link, there := b.links[j.to]; there {
+		b.Link(j.x, j.y, j.w, j.h, link)
 	}
 }
 
@@ -105,12 +90,9 @@ type bookmark struct {
 	y     float64
 }
 
-func (b bookmark) numbers() []float64 { return []float64{b.y} }
+func (m bookmark) numbers() []float64 { return []float64{m.y} }
 
-func (b bookmark) draw(out *painter) {
-	out.letters(regular, body.size) // in whose code the title is written
-	out.Bookmark(b.title, 0, b.y)
-}
+func (m bookmark) note(b *binding) { b.Bookmark(m.title, 0, m.y) }
 
 // contents lists sections with their sheets, in two columns.
 func (w *flow) contents(c page.Contents) {

@@ -364,11 +364,9 @@ func TestCutTextShowsIt(t *testing.T) {
 
 func TestACoordinateThatIsNoNumberIsRefused(t *testing.T) {
 	for _, v := range []float64{math.NaN(), math.Inf(1)} {
-		out := &painter{Fpdf: blank(A4, page.TitleBlock{}, names{})}
-		out.AddPage()
 		s := &sheet{}
 		s.add(stroke{0, 0, v, 1, 0.1, 0})
-		if err := paint(out, s); err == nil {
+		if err := testPainter(t).paint(s); err == nil {
 			t.Errorf("%g was drawn", v)
 		}
 	}

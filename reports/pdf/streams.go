@@ -9,29 +9,20 @@ import (
 	"runtime"
 	"slices"
 	"strconv"
-	"sync"
+
+	"kilovet/hv/parallel"
 )
 
-// deflating takes a file that comes in one piece, without a copy of it, and compresses it.
-type deflating struct{ file []byte }
-
-func (d *deflating) Write(plain []byte) (int, error) {
-	if d.file != nil {
-		return 0, errStructure
-	}
-	file, err := deflated(plain)
-	d.file = file
-	return len(plain), err
-}
-
-// deflated is a file with its plain streams compressed. The library sets up a compressor
-// anew for each sheet, which takes longer than to compress; here a few serve all.
-func deflated(file []byte) ([]byte, error) {
+// assembled is a file of the library with the sheets, compressed, in the places that are
+// marked, and its other plain streams compressed as well.
+func assembled(file []byte, sheets [][]byte) ([]byte, error) {
 	objects, table, err := objectsOf(file)
 	if err != nil {
 		return nil, err
 	}
-	deflateAll(objects)
+	if err := fillIn(objects, sheets); err != nil {
+		return nil, err
+	}
 	out := bytes.NewBuffer(make([]byte, 0, len(file)/2))
 	out.Write(file[:objects[0].at])
 	moved := make([]int, len(objects)+1)
@@ -124,33 +115,55 @@ func (o object) plainStream() []byte {
 	return rest[:n]
 }
 
-// deflateAll compresses the streams, each processor some of them.
-func deflateAll(objects []object) {
-	var group sync.WaitGroup
-	workers := runtime.GOMAXPROCS(0)
-	for k := range workers {
-		group.Go(func() {
-			var compressor *zlib.Writer
-			for i := k; i < len(objects); i += workers {
-				if objects[i].stream != nil {
-					compressor = deflate(compressor, &objects[i])
-				}
-			}
-		})
+// fillIn gives the sheets to the objects that are marked, and compresses the others.
+func fillIn(objects []object, sheets [][]byte) error {
+	var small deflater
+	next := 0
+	for i := range objects {
+		switch o := &objects[i]; {
+		case o.stream == nil:
+		case next < len(sheets) && bytes.Contains(o.stream, []byte(mark(next))):
+			o.small = sheets[next]
+			next++
+		default:
+			o.small = small.of(o.stream)
+		}
 	}
-	group.Wait()
+	if next < len(sheets) {
+		return errStructure
+	}
+	return nil
 }
 
-// deflate compresses one stream with a compressor that may serve again; nil is set up.
-func deflate(compressor *zlib.Writer, o *object) *zlib.Writer {
-	var out bytes.Buffer
-	if compressor == nil {
-		compressor, _ = zlib.NewWriterLevel(&out, zlib.BestSpeed) // a level that there is
-	} else {
-		compressor.Reset(&out)
+// deflateAll compresses what is seen on sheets, each processor some of them.
+func deflateAll(painted []*painter) [][]byte {
+	all := make([][]byte, len(painted))
+	workers := min(runtime.GOMAXPROCS(0), len(painted))
+	work := make([]func(), workers)
+	for k := range work {
+		work[k] = func() {
+			var small deflater
+			for i := k; i < len(painted); i += workers {
+				all[i] = small.of(painted[i].content)
+			}
+		}
 	}
-	_, _ = compressor.Write(o.stream) // a buffer takes everything
-	_ = compressor.Close()
-	o.small = out.Bytes()
-	return compressor
+	parallel.Do(work...)
+	return all
+}
+
+// deflater compresses one stream after the other. The library sets up a compressor anew
+// for each, which takes longer than to compress.
+type deflater struct{ writer *zlib.Writer }
+
+func (d *deflater) of(plain []byte) []byte {
+	out := bytes.NewBuffer(make([]byte, 0, len(plain)/2))
+	if d.writer == nil {
+		d.writer, _ = zlib.NewWriterLevel(out, zlib.BestSpeed) // a level that there is
+	} else {
+		d.writer.Reset(out)
+	}
+	_, _ = d.writer.Write(plain) // a buffer takes everything
+	_ = d.writer.Close()
+	return out.Bytes()
 }

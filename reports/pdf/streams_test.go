@@ -7,37 +7,35 @@ import (
 	"fmt"
 	"io"
 	"runtime"
+	"slices"
 	"testing"
 
 	"kilovet/reports/internal/sample"
 	"kilovet/reports/page"
 )
 
-// plainFile is the file of the library before its streams are compressed.
-func plainFile(t *testing.T) []byte {
+// bound is the file of the library, what is seen on its sheets, and the same compressed.
+func bound(t *testing.T) (plain []byte, painted []*painter, small [][]byte) {
 	t.Helper()
-	f := testFonts(t)
-	w := layout(f, a4, testPen(), nil, page.New(sample.Failing()))
-	out := &painter{Fpdf: blank(A4, page.TitleBlock{}, names{}), fonts: f, links: map[string]int{}}
-	w.announce(out)
-	for _, s := range w.sheets {
-		out.AddPage()
-		if err := paint(out, s); err != nil {
-			t.Fatal(err)
-		}
-	}
-	var file bytes.Buffer
-	if err := out.Output(&file); err != nil {
+	press := readyPress(t)
+	d := page.New(sample.Failing())
+	w := press.laidOut(&ahead{}, d)
+	painted, err := press.painted(w)
+	if err != nil {
 		t.Fatal(err)
 	}
-	return file.Bytes()
+	plain, err = press.binding.bound(w, d.Block, painted)
+	if err != nil {
+		t.Fatal(err)
+	}
+	return plain, painted, deflateAll(painted)
 }
 
-// Compressed streams inflate to what they were, every object stands where the table
-// says, and nothing else has changed.
-func TestDeflatedKeepsEveryObject(t *testing.T) {
-	plain := plainFile(t)
-	file, err := deflated(plain)
+// The sheets stand in their places, compressed as other streams are, every object stands
+// where the table says, and nothing else has changed.
+func TestAssembledKeepsEveryObject(t *testing.T) {
+	plain, painted, small := bound(t)
+	file, err := assembled(plain, small)
 	if err != nil {
 		t.Fatal(err)
 	}
@@ -61,13 +59,17 @@ func TestDeflatedKeepsEveryObject(t *testing.T) {
 			}
 			continue
 		}
+		want := o.stream
+		if streams < len(painted) {
+			want = painted[streams].content
+		}
 		streams++
-		if got := inflated(t, now.whole); !bytes.Equal(got, o.stream) {
-			t.Errorf("object %d: %d bytes became %d", o.number, len(o.stream), len(got))
+		if got := inflated(t, now.whole); !bytes.Equal(got, want) {
+			t.Errorf("object %d: %d bytes became %d", o.number, len(want), len(got))
 		}
 	}
-	if streams < 4 || len(file) >= len(plain) {
-		t.Errorf("%d streams, %d bytes of %d", streams, len(file), len(plain))
+	if streams < len(painted)+2 {
+		t.Errorf("%d streams of %d sheets", streams, len(painted))
 	}
 }
 
@@ -87,29 +89,30 @@ func inflated(t *testing.T, object []byte) []byte {
 
 // How many compress at once does not show.
 func TestDeflatedAlikeOnAnyNumberOfProcessors(t *testing.T) {
-	plain := plainFile(t)
+	_, painted, _ := bound(t)
 	defer runtime.GOMAXPROCS(runtime.GOMAXPROCS(0))
-	var first []byte
+	var first [][]byte
 	for _, n := range []int{1, 2, 7} {
 		runtime.GOMAXPROCS(n)
-		file, err := deflated(plain)
-		if err != nil || first != nil && !bytes.Equal(file, first) {
-			t.Fatalf("%d processors: other bytes, %v", n, err)
+		small := deflateAll(painted)
+		if first != nil && !slices.EqualFunc(small, first, bytes.Equal) {
+			t.Fatalf("%d processors: other bytes", n)
 		}
-		first = file
+		first = small
 	}
 }
 
 func TestAFileBuiltOtherwiseIsRefused(t *testing.T) {
-	plain := plainFile(t)
+	plain, _, small := bound(t)
 	for name, file := range map[string][]byte{
 		"empty":        nil,
 		"cut":          plain[:len(plain)/2],
 		"no table":     bytes.ReplaceAll(plain, []byte("xref\n0 "), []byte("xxxx\n0 ")),
 		"far away":     bytes.Replace(plain, []byte("startxref\n"), []byte("startxref\n9"), 1),
+		"no mark":      bytes.Replace(plain, []byte(mark(1)), []byte("% another "), 1),
 		"a wild place": bytes.Replace(plain, []byte("65535 f \n0"), []byte("65535 f \nx"), 1),
 	} {
-		if _, err := deflated(file); !errors.Is(err, errStructure) {
+		if _, err := assembled(file, small); !errors.Is(err, errStructure) {
 			t.Errorf("%s: %v", name, err)
 		}
 	}

@@ -50,7 +50,7 @@ func (r *reviewing) sheetsUsable() error {
 func (r *reviewing) render(review *rules.Review, note string) (outputs []output, shown []byte, err error) {
 	var makers []maker
 	if r.pdf != "" {
-		makers = append(makers, maker{r.pdf, func() ([]byte, error) { return pdf.RenderOn(pdf.Paper(r.paper), page.New(review).Noted(note)) }})
+		makers = append(makers, maker{r.pdf, func() ([]byte, error) { return r.press.Render(page.New(review).Noted(note)) }})
 	}
 	if r.html != "" {
 		makers = append(makers, maker{r.html, func() ([]byte, error) { return html.RenderWith(review, html.Options{Note: note}) }})

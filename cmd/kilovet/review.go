@@ -17,6 +17,8 @@ import (
 	"kilovet/hv/chain"
 	"kilovet/hv/document"
 	"kilovet/reports/digest"
+	"kilovet/reports/html"
+	"kilovet/reports/pdf"
 	"kilovet/reports/text"
 	"kilovet/rules"
 	"kilovet/rules/rule"
@@ -33,6 +35,7 @@ type reviewing struct {
 	without     []string
 
 	under *localLimits // once read
+	press *pdf.Press   // set up while the review is made; nil where no sheets are wanted
 }
 
 func reviewCommand(w world) *cobra.Command {
@@ -87,6 +90,7 @@ func (r *reviewing) run(args []string) error {
 	if err := r.writable(args, sheets); err != nil {
 		return err
 	}
+	r.begin()
 	given, err := r.input(args)
 	if err != nil {
 		return err
@@ -109,6 +113,17 @@ func (r *reviewing) run(args []string) error {
 		return exitf(unsound, "%s left out: nothing of that was judged", strings.Join(r.without, " and "))
 	}
 	return verdict(review, concerns)
+}
+
+// begin prepares what does not depend on the description, while that is read.
+func (r *reviewing) begin() {
+	go makeRoom()
+	if r.pdf != "" {
+		r.press = pdf.Begin(pdf.Paper(r.paper))
+	}
+	if r.html != "" {
+		go html.Prepare()
+	}
 }
 
 // source is a description before it is understood.

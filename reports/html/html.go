@@ -11,6 +11,7 @@ import (
 	"fmt"
 	"html/template"
 	"strings"
+	"sync"
 
 	"kilovet/hv/document"
 	"kilovet/rules"
@@ -35,12 +36,12 @@ func RenderWith(r *rules.Review, o Options) ([]byte, error) {
 	if err != nil {
 		return nil, err
 	}
-	return render(reviewBody, p)
+	return render(reviewForm, p)
 }
 
 // Faults writes a description with its faults, each at its line.
 func Faults(name string, description []byte, faults document.Faults, o Options) ([]byte, error) {
-	return render(faultsBody, faultsPage(name, description, faults, o))
+	return render(faultsForm, faultsPage(name, description, faults, o))
 }
 
 // The pieces of a page.
@@ -101,11 +102,25 @@ func digests(texts []string) string {
 	return strings.Join(all, " ")
 }
 
-func render(body string, page any) ([]byte, error) {
+// The forms of the pages, read once.
+var (
+	reviewForm = sync.OnceValues(func() (*template.Template, error) { return form(reviewBody) })
+	faultsForm = sync.OnceValues(func() (*template.Template, error) { return form(faultsBody) })
+)
+
+// Prepare reads the form of a review, which else the first page does.
+func Prepare() { _, _ = reviewForm() }
+
+func form(body string) (*template.Template, error) {
 	t, err := template.New("page").Parse(frame)
 	if err == nil {
 		t, err = t.Parse(body)
 	}
+	return t, err
+}
+
+func render(form func() (*template.Template, error), page any) ([]byte, error) {
+	t, err := form()
 	if err != nil {
 		return nil, fmt.Errorf("html: %w", err)
 	}

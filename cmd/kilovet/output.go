@@ -10,6 +10,7 @@ import (
 	"path/filepath"
 	"strings"
 
+	"kilovet/hv/parallel"
 	"kilovet/reports/seal"
 )
 
@@ -19,21 +20,38 @@ type output struct {
 	data []byte
 }
 
-// replaceAll writes the outputs one after the other, each whole, once it is clear that
-// none takes the place of something else; the first that cannot be written ends it, and
-// the message names those that were.
+// replaceAll writes the outputs, each whole, once it is clear that none takes the place of
+// something else: all beside the files that they replace, and then each in its place. The
+// first that cannot be written ends it, and the message names those that were.
 func replaceAll(outputs []output) error {
 	for _, o := range outputs {
 		if err := spares(o.path, kindOf(o.data)); err != nil {
 			return err
 		}
 	}
-	for i, o := range outputs {
-		if err := o.replace(); err != nil {
-			return exitf(files, "%s cannot be written: %v%s", o.path, plain(err), written(outputs[:i]))
+	parts, errs := make([]part, len(outputs)), make([]error, len(outputs))
+	parallel.Each(len(outputs), func(i int) { parts[i], errs[i] = outputs[i].beside() })
+	defer func() {
+		for _, p := range parts {
+			p.giveUp()
+		}
+	}()
+	for i, err := range errs {
+		if err != nil {
+			return unwritten(outputs, i, 0, err)
+		}
+	}
+	for i := range parts {
+		if err := parts[i].settle(); err != nil {
+			return unwritten(outputs, i, i, err)
 		}
 	}
 	return nil
+}
+
+// unwritten says that an output cannot be written, and how many were.
+func unwritten(outputs []output, which, were int, err error) error {
+	return exitf(files, "%s cannot be written: %v%s", outputs[which].path, plain(err), written(outputs[:were]))
 }
 
 // kind is what an output is, how files of it begin, what they hold further on, and whether
@@ -113,35 +131,69 @@ func written(outputs []output) string {
 	return "; written: " + strings.Join(names, ", ")
 }
 
-// replace puts the data in the place of the file by renaming a new one from the
-// same folder, so that a reader sees the old file or the new one. What is no
-// regular file, such as a device, is written into.
-func (o output) replace() error {
-	path := o.path
-	if target, err := filepath.EvalSymlinks(path); err == nil {
-		path = target
+// part is an output that is written and not yet in its place.
+type part struct {
+	path string // of the place
+	file string // beside it, to be renamed; empty where data is to be written into the place
+	data []byte
+}
+
+// beside writes the data to a new file in the folder of the one to be replaced, so that a
+// reader sees the old file or the new one. What is no regular file, such as a device, is
+// written into when its turn comes.
+func (o output) beside() (part, error) {
+	p := part{path: o.path, data: o.data}
+	if target, err := filepath.EvalSymlinks(p.path); err == nil {
+		p.path = target
 	}
 	mode := fs.FileMode(0o666)
-	if info, err := os.Stat(path); err == nil {
+	if info, err := os.Stat(p.path); err == nil {
 		switch {
 		case info.IsDir():
-			return errors.New("it is a folder")
+			return part{}, errors.New("it is a folder")
 		case !info.Mode().IsRegular():
-			return os.WriteFile(path, o.data, mode)
+			return p, nil
 		}
 		mode = info.Mode().Perm()
 	}
-	part, err := create(path, mode)
+	file, err := create(p.path, mode)
+	if err != nil {
+		return part{}, err
+	}
+	p.file = file.Name()
+	if err := fill(file, o.data); err != nil {
+		return part{}, errors.Join(err, os.Remove(p.file))
+	}
+	return p, nil
+}
+
+// settle puts the output in its place.
+func (p *part) settle() error {
+	if p.file == "" {
+		return os.WriteFile(p.path, p.data, 0o666)
+	}
+	if err := os.Rename(p.file, p.path); err != nil {
+		return err
+	}
+	p.file = ""
+	return nil
+}
+
+// giveUp removes what is not in its place.
+func (p *part) giveUp() {
+	if p.file != "" {
+		_ = os.Remove(p.file) // what stays is named as a part
+	}
+}
+
+// replace writes one output.
+func (o output) replace() error {
+	p, err := o.beside()
 	if err != nil {
 		return err
 	}
-	if err := fill(part, o.data); err != nil {
-		return errors.Join(err, os.Remove(part.Name()))
-	}
-	if err := os.Rename(part.Name(), path); err != nil {
-		return errors.Join(err, os.Remove(part.Name()))
-	}
-	return nil
+	defer p.giveUp()
+	return p.settle()
 }
 
 // create makes a new file beside the one to be replaced.

@@ -2,6 +2,7 @@ package network
 
 import (
 	"math"
+	"slices"
 
 	"kilovet/hv/circuit"
 	"kilovet/hv/lack"
@@ -13,6 +14,8 @@ type StartOptions struct {
 	Node  circuit.Node      // that has to come up
 	Share quantity.Fraction // of its final mean; zero is 95 %
 	Ramp  quantity.Time     // over which the drive rises in proportion to time
+
+	every bool // period is walked: no leaps
 }
 
 // Startup is the start of a circuit from all capacitors discharged, the drive from
@@ -149,13 +152,17 @@ func (r *rise) climb(e *envelope, until float64) (done bool, err error) {
 		r.out.Work.Products += e.work.Products
 	}()
 	e.periods = r.periods
-	at := foothold{x: append([]float64(nil), e.x...), periods: e.periods, beyond: math.Inf(1)}
+	at := newFoothold(e)
 	for range 400 {
 		if e.periods >= until {
 			return false, nil
 		}
-		if done, err := r.tread(e, &at); done || err != nil {
+		if done, err := r.tread(e, at); done || err != nil {
 			return done, err
+		}
+		if r.options.every {
+			e.pass()
+			continue
 		}
 		if err := e.advance(at.reach(until, r.level)); err != nil {
 			return false, err
@@ -168,7 +175,12 @@ func (r *rise) climb(e *envelope, until float64) (done bool, err error) {
 // up, or a foothold, or beyond it, and then the climb goes back to the last foothold.
 func (r *rise) tread(e *envelope, at *foothold) (done bool, err error) {
 	leapt := e.periods-at.periods > 1
+	at.track, e.linear = e.linear, at.track
 	up, err := r.look(e)
+	if err == nil && leapt && e.periods+1 < at.beyond && e.wandered() > wandering {
+		e.pass()
+		up, err = r.look(e)
+	}
 	if err != nil {
 		return false, err
 	}
@@ -181,25 +193,41 @@ func (r *rise) tread(e *envelope, at *foothold) (done bool, err error) {
 		return true, nil
 	case up:
 		at.beyond, at.above = e.periods, r.highest
-		copy(e.x, at.x)
-		e.periods = at.periods
-		if err := e.here(rough); err != nil {
-			return false, err
-		}
+		at.back(e)
 	default:
 		at.below = r.highest
+		at.hold(e)
 	}
-	copy(at.x, e.x)
-	at.periods = e.periods
 	return false, nil
 }
 
-// foothold is the last state at which the node had not come up.
+// foothold is the last state at which the node had not come up, with its period.
 type foothold struct {
-	x            []float64
+	x, change    []float64
+	track        *track // while another period is walked; else one to walk on
 	periods      float64
 	beyond       float64 // periods at which it had
 	below, above float64 // its highest voltage here and there
+}
+
+func newFoothold(e *envelope) *foothold {
+	return &foothold{x: slices.Clone(e.x), change: slices.Clone(e.start), track: &track{system: e.system}, periods: e.periods, beyond: math.Inf(1)}
+}
+
+// hold makes the period walked last the foothold.
+func (f *foothold) hold(e *envelope) {
+	copy(f.x, e.from)
+	copy(f.change, e.start)
+	f.periods = e.periods
+}
+
+// back goes to the foothold.
+func (f *foothold) back(e *envelope) {
+	copy(e.x, f.x)
+	copy(e.from, f.x)
+	copy(e.start, f.change)
+	e.linear, f.track = f.track, e.linear
+	e.periods = f.periods
 }
 
 // reach is the number of periods that the next leap may take.

@@ -55,6 +55,40 @@ func TestStartTakesFewPeriods(t *testing.T) {
 	}
 }
 
+// What leaps pass over does not show: the rise, and the largest currents on the way, against
+// every period walked. The first three are ladders of stiff diodes, whose charges a leap
+// leaves wrong.
+func TestLeapsAgainstEveryPeriod(t *testing.T) {
+	for i, l := range []ladder{
+		{stages: 4, resistance: 3.45, capacitance: 3.373e-9, current: 1.295e-4, drop: 3.64, on: 1.153, leakage: "1 nA"},
+		{stages: 4, resistance: 4.365, capacitance: 1.2437e-9, drop: 4.024, on: 11.15, leakage: "1 nA"},
+		{stages: 7, resistance: 20.79, capacitance: 3.293e-9, current: 8.329e-4, drop: 2.5, on: 1.2767, leakage: "1 nA"},
+		{stages: 6, resistance: 600, capacitance: 2.2e-9, current: 1e-4, drop: 8, on: 50, leakage: "1 nA"},
+		{stages: 5, resistance: 50, capacitance: 1e-9, current: 1e-5, drop: 8, on: 300, leakage: "1 nA"},
+	} {
+		l.frequency, l.peak = 50e3, 1000
+		p := steady(t, build(t, l.describe()))
+		o := StartOptions{Node: node(t, p.Circuit, "multiplier")}
+		got, err := Start(p, o)
+		o.every = true
+		want, err2 := Start(p, o)
+		if err != nil || err2 != nil {
+			t.Fatal(err, err2)
+		}
+		if 3*got.Work.Periods > 2*want.Work.Periods {
+			t.Errorf("ladder %d: %d periods walked of %d", i, got.Work.Periods, want.Work.Periods)
+		}
+		if d := math.Abs(float64(got.Reached-want.Reached)) * l.frequency; d > 1.1 {
+			t.Errorf("ladder %d: up %.2f periods off", i, d)
+		}
+		for _, e := range p.Circuit.Elements {
+			if a, b := float64(got.Of(e.Name).Peak), float64(want.Of(e.Name).Peak); math.Abs(a-b) > 0.01*b {
+				t.Errorf("ladder %d: %s has %g, walked through %g", i, e.Name, a, b)
+			}
+		}
+	}
+}
+
 // Periods to 95 % of the no-load output, equal capacitors, ideal source, every pulse
 // levelling what it joins: 40.5, 72.5, 162.5, 288.5 for 3, 4, 6, 8 stages. Derived by
 // an independent simulation for a square wave; a sine within a quarter of a period.

@@ -117,7 +117,7 @@ func (r *reviewing) run(args []string) error {
 
 // begin prepares what does not depend on the description, while that is read.
 func (r *reviewing) begin() {
-	go makeRoom()
+	makeRoom()
 	if r.pdf != "" {
 		r.press = pdf.Begin(pdf.Paper(r.paper))
 	}

@@ -13,7 +13,8 @@ import (
 // Any loaded ladder found swiftly from the state of one whose values are up to a tenth other is the
 // same whether the last slight correction is carried through the period or the period is
 // walked again: potentials to a part in fifty thousand of the largest, means of the diodes'
-// currents to a thousandth of the largest, peaks to a hundredth of their own.
+// currents to a thousandth of the largest, peaks to a hundredth of their own and, for what
+// hardly conducts, a ten-thousandth of the largest.
 func TestAnyCarriedThroughIsAsWalkedOn(t *testing.T) {
 	rapid.Check(t, func(t *rapid.T) {
 		whole, err := Steady(buildFor(t, drawLadder(t)), Options{Most: 5000})
@@ -51,7 +52,7 @@ func foundSwiftly(t *rapid.T, c *circuit.Circuit, near *Periodic, slight float64
 }
 
 func sameState(t *rapid.T, walked, carried *Periodic) {
-	volts, amps := extents(walked)
+	volts, amps, peak := extents(walked)
 	for _, c := range walked.track.capacitors {
 		if amps*walked.track.period < 1e-5*c.value*volts {
 			return // it hangs on next to nothing
@@ -73,14 +74,14 @@ func sameState(t *rapid.T, walked, carried *Periodic) {
 			continue
 		}
 		a, b := walked.Diode(e.Name), carried.Diode(e.Name)
-		if math.Abs(float64(b.Mean-a.Mean)) > 1e-3*amps || math.Abs(float64(b.Peak-a.Peak)) > 0.01*float64(a.Peak)+1e-3*amps {
+		if math.Abs(float64(b.Mean-a.Mean)) > 1e-3*amps || math.Abs(float64(b.Peak-a.Peak)) > 0.01*float64(a.Peak)+1e-3*amps+1e-4*peak {
 			t.Errorf("%s: %v, walked %v (%v)", e.Name, b, a, carried.Work)
 		}
 	}
 }
 
-// extents are the largest potential and the largest mean current of a diode.
-func extents(p *Periodic) (volts, amps float64) {
+// extents are the largest potential, and the largest mean current and peak of a diode.
+func extents(p *Periodic) (volts, amps, peak float64) {
 	for n := range p.Circuit.Nodes() {
 		if s, err := p.At(circuit.Node(n)); err == nil {
 			volts = math.Max(volts, float64(s.Peak()))
@@ -88,8 +89,9 @@ func extents(p *Periodic) (volts, amps float64) {
 	}
 	for i := range p.Circuit.Elements {
 		if e := &p.Circuit.Elements[i]; e.Kind == circuit.Diode {
-			amps = math.Max(amps, float64(p.Diode(e.Name).Mean))
+			d := p.Diode(e.Name)
+			amps, peak = math.Max(amps, float64(d.Mean)), math.Max(peak, float64(d.Peak))
 		}
 	}
-	return volts, amps
+	return volts, amps, peak
 }

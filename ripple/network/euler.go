@@ -40,7 +40,6 @@ func (w *walker) euler(h, end float64) {
 		m := c + h*(w.matrix[k]+h*w.coil[k])
 		w.factor[k] = trio{m, m, 0}
 	}
-	w.pattern.factorise(w.factor)
 	for k := range w.lanes {
 		w.lanes[k] = trio{r: w.pull(k, h, end) - h*(w.steady[k]+(w.swing[k]-w.condSine[k])*end)}
 	}
@@ -48,7 +47,7 @@ func (w *walker) euler(h, end float64) {
 		l := &w.inductors[i]
 		l.injectTrio(w.lanes, trio{r: -h * (w.amps[i] + h/l.value*l.offset.at(w.sign, end))})
 	}
-	w.pattern.solve(w.factor, w.lanes)
+	w.pattern.factorise(w.factor, w.lanes)
 }
 
 // pull is the charge that the rest of an unknown's network is left with, without

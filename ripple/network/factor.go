@@ -4,68 +4,77 @@ package network
 // part of the complex one.
 type trio struct{ r, a, b float64 }
 
-// factorise replaces a matrix by its factors. The matrix is that of a network: it is
-// given by what ties each unknown to ground (the first n entries) and to each other
-// (the others, as positive admittances), and each elimination is a star turned into
-// a mesh, which only ever adds. So nothing cancels, however far the admittances lie
-// apart (Grassmann, Taksar and Heyman, Oper. Res. 33 (1985) 1107). It leaves the inverse of each
-// pivot and the parts in which a star divides.
-func (p *pattern) factorise(x []trio) {
-	u := 0
-	for k := range p.n {
-		first, last := p.start[k], p.start[k+1]
-		column := x[p.n+int(first) : p.n+int(last)]
-		ground := x[k]
+// factorise replaces a matrix by its factors, and a right-hand side by the solution. The
+// matrix is that of a network: it is given by what ties each unknown to ground (the first n
+// entries) and to each other (the others, as positive admittances), and each elimination is a
+// star turned into a mesh, which only ever adds. So nothing cancels, however far the
+// admittances lie apart (Grassmann, Taksar and Heyman, Oper. Res. 33 (1985) 1107). It leaves
+// the inverse of each pivot and the parts in which a star divides.
+func (p *pattern) factorise(x, y []trio) {
+	pivot, low := x[:p.n], x[p.n:]
+	row, end, y := p.row[:len(low)], p.start[1:p.n+1], y[:len(pivot)]
+	s, u := 0, 0
+	for k := range pivot {
+		last := int(end[k])
+		ground, v := pivot[k], y[k]
 		d := ground
-		for _, g := range column {
+		for j := s; j < last; j++ {
+			g := &low[j]
 			d.r, d.a, d.b = d.r+g.r, d.a+g.a, d.b+g.b
 		}
 		m := 1 / (d.a*d.a + d.b*d.b)
 		d = trio{1 / d.r, d.a * m, -d.b * m}
-		x[k] = d
-		for s := range column {
-			g := column[s]
+		pivot[k] = d
+		y[k] = trio{v.r * d.r, v.a*d.a - v.b*d.b, v.a*d.b + v.b*d.a}
+		for ; s < last; s++ {
+			g := &low[s]
 			l := trio{g.r * d.r, g.a*d.a - g.b*d.b, g.a*d.b + g.b*d.a}
-			e := &x[p.row[int(first)+s]]
+			*g = l
+			e, f := &pivot[row[s]], &y[row[s]]
 			e.r += l.r * ground.r
 			e.a += l.a*ground.a - l.b*ground.b
 			e.b += l.a*ground.b + l.b*ground.a
-			for _, w := range column[s+1:] {
-				e := &x[p.update[u]]
+			f.r += l.r * v.r
+			f.a += l.a*v.a - l.b*v.b
+			f.b += l.a*v.b + l.b*v.a
+			for j := s + 1; j < last; j++ {
+				w, e := &low[j], &x[p.update[u]]
 				u++
 				e.r += l.r * w.r
 				e.a += l.a*w.a - l.b*w.b
 				e.b += l.a*w.b + l.b*w.a
 			}
-			column[s] = l
 		}
 	}
+	p.back(x, y)
 }
 
 // solve replaces a right-hand side by the solution.
 func (p *pattern) solve(x, y []trio) {
 	pivot, low := x[:p.n], x[p.n:]
-	y = y[:len(pivot)]
+	row, end, y := p.row[:len(low)], p.start[1:p.n+1], y[:len(pivot)]
+	s := 0
 	for k := range pivot {
 		v, d := y[k], &pivot[k]
-		row := p.row[p.start[k]:p.start[k+1]]
-		column := low[p.start[k]:p.start[k+1]]
-		column = column[:len(row)]
-		for s, r := range row {
-			l, e := &column[s], &y[r]
+		for ; s < int(end[k]); s++ {
+			l, e := &low[s], &y[row[s]]
 			e.r += l.r * v.r
 			e.a += l.a*v.a - l.b*v.b
 			e.b += l.a*v.b + l.b*v.a
 		}
 		y[k] = trio{v.r * d.r, v.a*d.a - v.b*d.b, v.a*d.b + v.b*d.a}
 	}
-	for k := len(pivot) - 1; k >= 0; k-- {
+	p.back(x, y)
+}
+
+// back takes a right-hand side from the pivots to the solution.
+func (p *pattern) back(x, y []trio) {
+	low := x[p.n:]
+	row, start := p.row[:len(low)], p.start[:p.n+1]
+	for k := p.n - 1; k >= 0; k-- {
 		v := y[k]
-		row := p.row[p.start[k]:p.start[k+1]]
-		column := low[p.start[k]:p.start[k+1]]
-		column = column[:len(row)]
-		for s, r := range row {
-			l, w := &column[s], &y[r]
+		for s := int(start[k]); s < int(start[k+1]); s++ {
+			l, w := &low[s], &y[row[s]]
 			v.r += l.r * w.r
 			v.a += l.a*w.a - l.b*w.b
 			v.b += l.a*w.b + l.b*w.a

@@ -84,9 +84,8 @@ func (w *walker) try(h float64) {
 	w.work.Factorisations++
 	w.turn(h)
 	w.fill(h)
-	w.pattern.factorise(w.factor)
 	w.load(h)
-	w.pattern.solve(w.factor, w.lanes)
+	w.pattern.factorise(w.factor, w.lanes)
 	w.spread(h)
 }
 

@@ -50,7 +50,8 @@ func (s *span) inject(y []float64, i float64) {
 // valued is an element with one value: capacitance, conductance, inductance or current.
 type valued struct {
 	span
-	value float64
+	value  float64
+	weight float64 // of a capacitor: the same, at most the typical
 }
 
 // rectifier is a diode: i = leak·v + max(0, v − drop)·on.
@@ -149,7 +150,7 @@ func (s *system) span(i int) span {
 func (s *system) collect() {
 	add := func(list *[]valued, i int, v float64) {
 		if v != 0 {
-			*list = append(*list, valued{s.span(i), v})
+			*list = append(*list, valued{span: s.span(i), value: v})
 		}
 	}
 	for i := range s.c.Elements {
@@ -184,6 +185,10 @@ func (s *system) typify() {
 		largest = math.Max(largest, c.value)
 	}
 	s.typical = math.Min(fitted, largest)
+	for i := range s.capacitors {
+		c := &s.capacitors[i]
+		c.weight = math.Min(c.value, s.typical)
+	}
 }
 
 // spans visits the span of every element that joins potentials.

@@ -97,18 +97,15 @@ func (p *peaks) change() (changed bool) {
 
 // search is the part of the correction at which the convex function is least.
 func (p *peaks) search() float64 {
-	start, curve := p.slope()
-	return leastAlong(func(t float64) float64 {
-		sum := start + curve*t
-		for i := range p.diodes {
-			for half := range 2 {
-				d := &p.diodes[i]
-				rate := d.difference(p.d[half*p.n : (half+1)*p.n])
-				sum += p.half() * p.soft[i] * rate * math.Max(0, p.over(i, half, p.u)+t*rate)
-			}
+	p.way.start, p.way.curve = p.slope()
+	p.way.kinks = p.way.kinks[:0]
+	for i := range p.diodes {
+		for half := range 2 {
+			rate := p.diodes[i].difference(p.d[half*p.n : (half+1)*p.n])
+			p.way.kinks = append(p.way.kinks, kink{p.over(i, half, p.u), rate, p.half() * p.soft[i] * rate})
 		}
-		return sum
-	})
+	}
+	return p.way.least()
 }
 
 // slope is the derivative of the function without the diodes along the correction,

@@ -98,7 +98,7 @@ func (l *ledger) gather(a *tieAccount, p *page) {
 // look widens the range of the voltage to what it does over a step. A cubic leaves the
 // range of its samples by less than the range itself.
 func (s *Stress) look(euler bool, v0, v1, v2, v3 float64) {
-	low, high := min(v0, v1, v2, v3), max(v0, v1, v2, v3)
+	low, high := rangeOf(v0, v1, v2, v3)
 	if low-(high-low) >= float64(s.Least) && high+(high-low) <= float64(s.Greatest) {
 		return
 	}
@@ -111,7 +111,7 @@ func (l *ledger) book(i int, p *page, y1, y2, y3, v1, v2, v3 float64) {
 	s := &l.of[i]
 	y0 := l.last[i]
 	l.last[i] = y3
-	low, high := min(y0, y1, y2, y3), max(y0, y1, y2, y3)
+	low, high := rangeOf(y0, y1, y2, y3)
 	if low-(high-low) < -float64(s.Peak) || high+(high-low) > float64(s.Peak) {
 		y := samples{y0, y1, y2, y3}
 		s.Peak = quantity.Current(y.peak(p.euler, float64(s.Peak)))

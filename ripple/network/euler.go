@@ -64,16 +64,14 @@ func (w *walker) descend(h, end float64) (far float64, whole bool) {
 		d[k] = w.lanes[k].r - u[k]
 		far = math.Max(far, math.Abs(d[k]))
 	}
-	start, curve := w.slope(u, d, h, end)
-	t := leastAlong(func(t float64) float64 {
-		sum := start + t*curve
-		for i := range w.diodes {
-			p := &w.diodes[i]
-			rate := p.difference(d)
-			sum += h * p.on * rate * math.Max(0, p.volts(u, w.sign, end)-p.drop+t*rate)
-		}
-		return sum
-	})
+	w.way.start, w.way.curve = w.slope(u, d, h, end)
+	w.way.kinks = w.way.kinks[:0]
+	for i := range w.diodes {
+		p := &w.diodes[i]
+		rate := p.difference(d)
+		w.way.kinks = append(w.way.kinks, kink{p.volts(u, w.sign, end) - p.drop, rate, h * p.on * rate})
+	}
+	t := w.way.least()
 	if t == 1 {
 		for k := range u {
 			u[k] = w.lanes[k].r
@@ -140,24 +138,4 @@ func (w *walker) settled(h, end float64) {
 		a := w.amps[i] + h/l.value*l.volts(w.stage[2], w.sign, end)
 		w.branch[0][i], w.branch[1][i], w.branch[2][i] = a, a, a
 	}
-}
-
-// leastAlong finds where on (0, 1] a rising derivative becomes zero, one where it
-// stays below.
-func leastAlong(derivative func(t float64) float64) float64 {
-	if derivative(1) <= 0 {
-		return 1
-	}
-	low, high := 0.1, 1.0
-	for low > 1e-25 && derivative(low) > 0 {
-		low, high = low/10, low
-	}
-	for range 50 {
-		if t := (low + high) / 2; derivative(t) > 0 {
-			high = t
-		} else {
-			low = t
-		}
-	}
-	return low
 }

@@ -49,7 +49,7 @@ func (w *walker) watch() {
 		if k := d.b; k >= 0 {
 			y0, y1, y2, y3 = y0-u0[k], y1-u1[k], y2-u2[k], y3-u3[k]
 		}
-		low, high := min(y0, y1, y2, y3), max(y0, y1, y2, y3)
+		low, high := rangeOf(y0, y1, y2, y3)
 		if w.on[i] {
 			low, high = -high, -low
 		}
@@ -219,6 +219,9 @@ func (w *walker) polish(h float64, target int) float64 {
 // leaving theirs at the same instant.
 func (w *walker) flip(diode int) {
 	for i := range w.diodes {
+		if end := w.beyond(i)[3]; i != diode && math.Abs(end) > 2*w.slack[i] {
+			continue
+		}
 		p := w.excess(i)
 		leaving := math.Abs(p.at(1)) <= w.slack[i] && p.slope(1) > 0 && math.Abs(p[0]) > w.slack[i]
 		if i == diode || leaving {

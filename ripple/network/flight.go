@@ -85,7 +85,7 @@ func (f *flight) measure() {
 		if len(f.track.steps) > 0 {
 			v = c.volts(f.u, f.sign, imag(f.wave))
 		}
-		sum += math.Min(c.value, f.typical) * v * v
+		sum += c.weight * v * v
 	}
 	f.energy = math.Max(math.Sqrt(sum), 1e-6*f.whole)
 	if f.swings {

@@ -162,6 +162,26 @@ func (y *samples) reach() (low, high float64) {
 	return low - (high - low), high + (high - low)
 }
 
+// rangeOf is the least and the greatest of four, in comparisons that a processor foresees where
+// they rise or fall.
+func rangeOf(a, b, c, d float64) (low, high float64) {
+	low, high = a, b
+	if b < a {
+		low, high = b, a
+	}
+	if c < low {
+		low = c
+	} else if c > high {
+		high = c
+	}
+	if d < low {
+		low = d
+	} else if d > high {
+		high = d
+	}
+	return low, high
+}
+
 // Point is a voltage at an instant of the period.
 type Point struct {
 	Time    quantity.Time

@@ -35,6 +35,7 @@ type walker struct {
 	near    []int      // diodes that the trial step may switch
 	margin  float64    // by which they may escape the cubic
 	care    float64    // the part of the mean current that it makes
+	way     way        // of the last settling
 	work    Work
 }
 
@@ -226,7 +227,7 @@ func (w *walker) roughness() float64 {
 		}
 		d := d0 - back(d1, d2, d3)
 		d += c.offset.sine * swing
-		sum += min(c.value, w.typical) * d * d
+		sum += c.weight * d * d
 	}
 	for i := range w.inductors {
 		d := w.amps[i] - back(w.branch[0][i], w.branch[1][i], w.branch[2][i])

@@ -84,8 +84,6 @@ type system struct {
 	cap, cond, coil        []float64 // capacitance, conductance without the conducting diodes and 1/L: to ground, then between unknowns
 	own                    []float64 // by unknown: all capacitance at it
 	couplings              []coupling
-	coupled                []neighbour // by unknown, each coupling twice
-	coupledEnd             []int32     // by unknown
 	capDirect, capSquare   []float64
 	capSine                []float64
 	condDirect, condSquare []float64
@@ -98,12 +96,6 @@ type system struct {
 // coupling is the capacitance between two unknowns.
 type coupling struct {
 	i, j  int
-	value float64
-}
-
-// neighbour is an unknown to which there is capacitance.
-type neighbour struct {
-	at    int32
 	value float64
 }
 

@@ -44,17 +44,6 @@ func (s *system) gather() {
 			}
 		}
 	}
-	for k := range s.n {
-		for _, c := range s.couplings {
-			switch k {
-			case c.i:
-				s.coupled = append(s.coupled, neighbour{int32(c.j), c.value})
-			case c.j:
-				s.coupled = append(s.coupled, neighbour{int32(c.i), c.value})
-			}
-		}
-		s.coupledEnd = append(s.coupledEnd, int32(len(s.coupled)))
-	}
 	for k, c := range s.own {
 		if c != 0 {
 			s.inner = append(s.inner, k)
@@ -87,14 +76,14 @@ func (p *span) offsets(value float64, direct, square, sine []float64) {
 
 // charge multiplies C with a vector of potentials.
 func (s *system) charge(u, q []float64) {
-	c, end, q := s.cap[:len(u)], s.coupledEnd[:len(u)], q[:len(u)]
-	k := 0
-	for i, v := range u {
-		sum := c[i] * v
-		for ; k < int(end[i]); k++ {
-			n := &s.coupled[k]
-			sum += n.value * (v - u[n.at])
-		}
-		q[i] = sum
+	c, q := s.cap[:len(u)], q[:len(u)]
+	for k, v := range u {
+		q[k] = c[k] * v
+	}
+	for i := range s.couplings {
+		c := &s.couplings[i]
+		d := c.value * (u[c.i] - u[c.j])
+		q[c.i] += d
+		q[c.j] -= d
 	}
 }

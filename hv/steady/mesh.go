@@ -157,56 +157,55 @@ func (f *factors) factor(g []float64) {
 
 // remove removes all nodes of the network whose conductances are in place.
 func (f *factors) remove() {
-	first, fills, g := int32(0), int32(0), f.g
+	g, arms, kept := f.g, f.mesh.arms, f.arms[:len(f.mesh.arms)]
+	next, first := 0, int32(0) // arm and fill
 	for k := range f.mesh.pivots {
 		p := &f.mesh.pivots[k]
-		sum, arms := 0.0, f.mesh.arms[first:p.arms]
-		kept := f.arms[first:p.arms][:len(arms)]
-		for i, a := range arms {
-			y := g[a.slot]
-			kept[i] = y
+		sum := 0.0
+		for ; next < int(p.arms); next++ {
+			y := g[arms[next].slot]
+			kept[next] = y
 			sum += y
 		}
 		f.share[k] = 0
 		if sum > 0 {
 			share := 1 / sum
 			f.share[k] = share
-			for _, x := range f.mesh.fills[fills:p.fills] {
+			for _, x := range f.mesh.fills[first:p.fills] {
 				g[x.slot] += g[x.one] * share * g[x.other]
 			}
 		}
-		first, fills = p.arms, p.fills
+		first = p.fills
 	}
 }
 
 // solve finds the potentials for the currents fed into the nodes, which it uses up.
 // A node that hangs on nothing keeps the potential it had in v.
 func (f *factors) solve(current, v []float64) {
-	pivots := f.mesh.pivots
-	share, first := f.share[:len(pivots)], int32(0)
+	pivots, arms, kept := f.mesh.pivots, f.mesh.arms, f.arms[:len(f.mesh.arms)]
+	share, next := f.share[:len(pivots)], 0
 	for k := range pivots {
 		p := &pivots[k]
-		passed, arms := current[p.node]*share[k], f.mesh.arms[first:p.arms]
-		kept := f.arms[first:p.arms][:len(arms)]
-		for i, a := range arms {
-			current[a.node] += passed * kept[i]
+		passed := current[p.node] * share[k]
+		for ; next < int(p.arms); next++ {
+			current[arms[next].node] += passed * kept[next]
 		}
-		first = p.arms
 	}
 	v[0] = 0
 	for k := len(pivots) - 1; k >= 0; k-- {
-		p, end := &pivots[k], first
-		if first = 0; k > 0 {
-			first = pivots[k-1].arms
+		end, from := next, 0
+		if k > 0 {
+			from = int(pivots[k-1].arms)
 		}
+		next = from
 		if share[k] == 0 {
 			continue
 		}
-		total, arms := current[p.node], f.mesh.arms[first:end]
-		kept := f.arms[first:end][:len(arms)]
-		for i, a := range arms {
-			total += kept[i] * v[a.node]
+		node := pivots[k].node
+		total := current[node]
+		for i := from; i < end; i++ {
+			total += kept[i] * v[arms[i].node]
 		}
-		v[p.node] = total * share[k]
+		v[node] = total * share[k]
 	}
 }

@@ -100,7 +100,15 @@ func (d *Dimension) accepted() string {
 
 var signs = strings.NewReplacer("\u00b5", "u", "\u03bc", "u", "\u2126", "ohm", "\u03a9", "ohm", "\u2212", "-", "²", "2", "³", "3", "\u00a0", " ", "\u202f", " ", "\u2009", " ")
 
-func plainSigns(s string) string { return signs.Replace(s) }
+// plainSigns writes the signs of units and numbers as a keyboard has them.
+func plainSigns(s string) string {
+	for i := range len(s) {
+		if s[i] >= utf8.RuneSelf {
+			return signs.Replace(s)
+		}
+	}
+	return s
+}
 
 // cut shortens what a message repeats of the input.
 func cut(s string) string {

@@ -6,6 +6,7 @@ import (
 	"slices"
 	"strconv"
 	"strings"
+	"sync"
 	"time"
 
 	"kilovet/hv/quantity"
@@ -111,7 +112,7 @@ func instrumented(text string) bool {
 		if _, tool, found := strings.Cut(" "+part, " with "); found && strings.TrimSpace(tool) != "" {
 			return true
 		}
-		if len(quantity.Mentions(part)) == 0 && len(letters.FindAllString(day.ReplaceAllString(part, ""), -1)) > 0 {
+		if len(quantity.Mentions(part)) == 0 && len(letters().FindAllString(day.ReplaceAllString(part, ""), -1)) > 0 {
 			return true
 		}
 	}
@@ -119,4 +120,4 @@ func instrumented(text string) bool {
 }
 
 // letters are those of a word, not of a lone unit or initial.
-var letters = regexp.MustCompile(`\pL{2,}|\pL-?\d`)
+var letters = sync.OnceValue(func() *regexp.Regexp { return regexp.MustCompile(`\pL{2,}|\pL-?\d`) })

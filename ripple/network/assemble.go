@@ -203,7 +203,7 @@ func (s *system) arrange() {
 			g.add(p.a, p.b)
 		}
 	})
-	s.pattern, s.place = newPattern(g, s.n)
+	s.pattern, s.place = patternOf(g, s.n)
 	s.spans(func(p *span) { p.a, p.b = s.at(p.a), s.at(p.b) })
 }
 

@@ -18,12 +18,15 @@ func (c column) node(stage int) string { return c.join("coupling", fmt.Sprint(st
 func (c column) drive() string         { return c.join("drive", "") }
 
 func (c column) join(first, last string) string {
-	for _, s := range []string{c.mark, last} {
-		if s != "" {
-			first += "." + s
-		}
+	switch {
+	case c.mark == "" && last == "":
+		return first
+	case c.mark == "":
+		return first + "." + last
+	case last == "":
+		return first + "." + c.mark
 	}
-	return first
+	return first + "." + c.mark + "." + last
 }
 
 // ladder adds drive, columns and diodes. Stage k of the smoothing column is

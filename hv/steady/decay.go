@@ -15,7 +15,7 @@ type Decay struct {
 
 	circuit  *circuit.Circuit
 	history  []Voltages      // by time
-	arrivals []arrival       // by time
+	arrivals []Voltages      // by time: how fast they move there, in volts a step
 	idle     map[string]bool // diodes that never carried anything
 }
 
@@ -37,12 +37,13 @@ func discharge(c *circuit.Circuit, from Voltages, limit quantity.Voltage, tolera
 	if err != nil {
 		return nil, err
 	}
-	d := &Decay{Limit: limit, circuit: bare, Times: []quantity.Time{0}, history: []Voltages{from}, arrivals: make([]arrival, 1)}
+	d := &Decay{Limit: limit, circuit: bare, Times: []quantity.Time{0}, history: []Voltages{from}, arrivals: make([]Voltages, 1)}
 	p := pace{tolerance: tolerance, floor: 0.1 * float64(limit), done: 1e-3 * float64(limit)}
+	var rows rows
 	err = r.run(p, func(t float64) {
 		d.Times = append(d.Times, quantity.Time(t))
-		d.history = append(d.history, r.potentials())
-		d.arrivals = append(d.arrivals, r.arrival())
+		d.history = append(d.history, r.potentials(rows.take(len(r.net.spots))))
+		d.arrivals = append(d.arrivals, r.arrivals(rows.take(len(r.net.spots))))
 	})
 	d.Work, d.idle = r.work, r.idle()
 	return d, err
@@ -59,8 +60,8 @@ func (r *rundown) idle() map[string]bool {
 	return idle
 }
 
-func (r *rundown) potentials() Voltages {
-	v := make(Voltages, len(r.net.spots))
+// potentials puts those of the nodes into a row.
+func (r *rundown) potentials(v Voltages) Voltages {
 	for n := range v {
 		v[n] = quantity.Voltage(r.net.at(circuit.Node(n), r.v))
 	}

@@ -6,28 +6,27 @@ import (
 	"kilovet/hv/quantity"
 )
 
-// arrival is how fast the potentials move at the end of a step, by joint, in volts a step.
-type arrival struct {
-	net    *network
-	slopes []float64
-}
-
-// arrival is that of the step taken last, whose last stage is its end.
-func (r *rundown) arrival() arrival {
-	a := arrival{r.net, make([]float64, r.net.joints)}
-	for j, d := range r.change[stages-1] {
-		a.slopes[j] = d / gamma
-	}
-	return a
-}
-
-// byNode are the slopes of the nodes.
-func (a *arrival) byNode() Voltages {
-	v := make(Voltages, len(a.net.spots))
+// arrivals puts into a row how fast the potentials of the nodes move at the end of the step
+// taken last, whose last stage that is, in volts a step.
+func (r *rundown) arrivals(v Voltages) Voltages {
+	slopes := r.change[stages-1]
 	for n := range v {
-		v[n] = quantity.Voltage(a.slopes[a.net.spots[n].joint])
+		v[n] = quantity.Voltage(slopes[r.net.spots[n].joint] / gamma)
 	}
 	return v
+}
+
+// rows gives rows of voltages, many of which lie together.
+type rows struct{ left Voltages }
+
+func (r *rows) take(n int) Voltages {
+	const together = 64
+	if len(r.left) < n {
+		r.left = make(Voltages, together*n)
+	}
+	row := r.left[:n:n]
+	r.left = r.left[n:]
+	return row
 }
 
 // stretch is a voltage over a step: an exponential towards some voltage, which has both ends
@@ -37,7 +36,7 @@ type stretch struct{ begin, end, fold float64 }
 func (d *Decay) stretch(i int, voltage func(Voltages) quantity.Voltage) stretch {
 	s := stretch{begin: float64(voltage(d.history[i])), end: float64(voltage(d.history[i+1]))}
 	if d.Times[i+1] > d.Times[i] {
-		s.fold = foldOf((s.end - s.begin) / float64(voltage(d.arrivals[i+1].byNode())))
+		s.fold = foldOf((s.end - s.begin) / float64(voltage(d.arrivals[i+1])))
 	}
 	return s
 }

@@ -171,7 +171,7 @@ type picture struct {
 	drawn       *drawing.Picture
 }
 
-func (p picture) numbers() []float64 { return []float64{p.x, p.y, p.scale} }
+func (p picture) nowhere() bool { return lost(p.x, p.y, p.scale) }
 
 func (p picture) draw(out *painter) {
 	c := newCanvas(out, p.x, p.y+float64(p.drawn.Height/vg.Millimeter)*p.scale, p.scale)

@@ -9,7 +9,7 @@ import (
 type sheet struct{ items []item }
 
 // item is a piece of text, a line or a box, or what the file notes of the sheet.
-type item interface{ numbers() []float64 }
+type item interface{ nowhere() bool }
 
 // seen is an item that is drawn.
 type seen interface{ draw(*painter) }
@@ -49,10 +49,8 @@ func (s *sheet) lines(x, y float64, lines []set) {
 // paint draws a sheet; a coordinate that is no number is refused.
 func (p *painter) paint(s *sheet) error {
 	for _, i := range s.items {
-		for _, v := range i.numbers() {
-			if math.IsNaN(v) || math.Abs(v) > 1e4 {
-				return fmt.Errorf("%T lies nowhere", i)
-			}
+		if i.nowhere() {
+			return fmt.Errorf("%T lies nowhere", i)
 		}
 		if i, is := i.(seen); is {
 			i.draw(p)
@@ -61,7 +59,17 @@ func (p *painter) paint(s *sheet) error {
 	return p.err
 }
 
-func (w written) numbers() []float64 { return []float64{w.x, w.y, w.style.size} }
+// lost reports whether some coordinate is no number, or on no sheet.
+func lost(all ...float64) bool {
+	for _, v := range all {
+		if math.IsNaN(v) || math.Abs(v) > 1e4 {
+			return true
+		}
+	}
+	return false
+}
+
+func (w written) nowhere() bool { return lost(w.x, w.y, w.style.size) }
 
 func (w written) draw(p *painter) {
 	ink := black
@@ -73,7 +81,7 @@ func (w written) draw(p *painter) {
 	p.text(w.x, w.y, w.text)
 }
 
-func (l stroke) numbers() []float64 { return []float64{l.x1, l.y1, l.x2, l.y2, l.width} }
+func (l stroke) nowhere() bool { return lost(l.x1, l.y1, l.x2, l.y2, l.width) }
 
 func (l stroke) draw(p *painter) {
 	p.stroke(grey(l.grey))
@@ -85,7 +93,7 @@ func (l stroke) draw(p *painter) {
 	p.put("l S\n")
 }
 
-func (b box) numbers() []float64 { return []float64{b.x, b.y, b.w, b.h, b.width} }
+func (b box) nowhere() bool { return lost(b.x, b.y, b.w, b.h, b.width) }
 
 func (b box) draw(p *painter) {
 	how := "S"

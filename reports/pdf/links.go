@@ -67,8 +67,8 @@ type reference struct {
 	to          string
 }
 
-func (r *reference) numbers() []float64 { return []float64{r.x, r.y, r.right} }
-func (r *reference) draw(*painter)      { panic("pdf: a sheet is referred to by no number") }
+func (r *reference) nowhere() bool { return lost(r.x, r.y, r.right) }
+func (r *reference) draw(*painter) { panic("pdf: a sheet is referred to by no number") }
 
 // jump is a place that leads to another.
 type jump struct {
@@ -76,7 +76,7 @@ type jump struct {
 	to         string
 }
 
-func (j jump) numbers() []float64 { return []float64{j.x, j.y, j.w, j.h} }
+func (j jump) nowhere() bool { return lost(j.x, j.y, j.w, j.h) }
 
 func (j jump) note(b *binding) {
 	if link, there := b.links[j.to]; there {
@@ -90,7 +90,7 @@ type bookmark struct {
 	y     float64
 }
 
-func (m bookmark) numbers() []float64 { return []float64{m.y} }
+func (m bookmark) nowhere() bool { return lost(m.y) }
 
 func (m bookmark) note(b *binding) { b.Bookmark(m.title, 0, m.y) }
 

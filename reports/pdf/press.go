@@ -69,13 +69,14 @@ func (p *Press) printed(w *flow, block page.TitleBlock) (file []byte, err error)
 	if err != nil {
 		return nil, err
 	}
-	var small [][]byte
+	var sheets [][]byte
+	var small *deflater
 	parallel.Do(
 		func() { file, err = p.binding.bound(w, block, painted) },
-		func() { small = deflateAll(painted) },
+		func() { sheets, small = deflateAll(painted) },
 	)
 	if err == nil {
-		file, err = assembled(file, small)
+		file, err = assembled(file, sheets, small)
 	}
 	if err != nil {
 		return nil, err

@@ -15,12 +15,12 @@ import (
 
 // assembled is a file of the library with the sheets, compressed, in the places that are
 // marked, and its other plain streams compressed as well.
-func assembled(file []byte, sheets [][]byte) ([]byte, error) {
+func assembled(file []byte, sheets [][]byte, small *deflater) ([]byte, error) {
 	objects, table, err := objectsOf(file)
 	if err != nil {
 		return nil, err
 	}
-	if err := fillIn(objects, sheets); err != nil {
+	if err := fillIn(objects, sheets, small); err != nil {
 		return nil, err
 	}
 	out := bytes.NewBuffer(make([]byte, 0, len(file)/2))
@@ -116,8 +116,7 @@ func (o object) plainStream() []byte {
 }
 
 // fillIn gives the sheets to the objects that are marked, and compresses the others.
-func fillIn(objects []object, sheets [][]byte) error {
-	var small deflater
+func fillIn(objects []object, sheets [][]byte, small *deflater) error {
 	next := 0
 	for i := range objects {
 		switch o := &objects[i]; {
@@ -135,21 +134,18 @@ func fillIn(objects []object, sheets [][]byte) error {
 	return nil
 }
 
-// deflateAll compresses what is seen on sheets, each processor some of them.
-func deflateAll(painted []*painter) [][]byte {
-	all := make([][]byte, len(painted))
-	workers := min(runtime.GOMAXPROCS(0), len(painted))
-	work := make([]func(), workers)
-	for k := range work {
-		work[k] = func() {
-			var small deflater
-			for i := k; i < len(painted); i += workers {
-				all[i] = small.of(painted[i].content)
-			}
+// deflateAll compresses what is seen on sheets, each processor some of them; a deflater is
+// left over.
+func deflateAll(painted []*painter) (all [][]byte, left *deflater) {
+	all = make([][]byte, len(painted))
+	workers := max(1, min(runtime.GOMAXPROCS(0), len(painted)))
+	small := make([]deflater, workers)
+	parallel.Each(workers, func(k int) {
+		for i := k; i < len(painted); i += workers {
+			all[i] = small[k].of(painted[i].content)
 		}
-	}
-	parallel.Do(work...)
-	return all
+	})
+	return all, &small[0]
 }
 
 // deflater compresses one stream after the other. The library sets up a compressor anew

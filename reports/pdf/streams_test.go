@@ -15,7 +15,7 @@ import (
 )
 
 // bound is the file of the library, what is seen on its sheets, and the same compressed.
-func bound(t *testing.T) (plain []byte, painted []*painter, small [][]byte) {
+func bound(t *testing.T) (plain []byte, painted []*painter, sheets [][]byte) {
 	t.Helper()
 	press := readyPress(t)
 	d := page.New(sample.Failing())
@@ -28,14 +28,15 @@ func bound(t *testing.T) (plain []byte, painted []*painter, small [][]byte) {
 	if err != nil {
 		t.Fatal(err)
 	}
-	return plain, painted, deflateAll(painted)
+	sheets, _ = deflateAll(painted)
+	return plain, painted, sheets
 }
 
 // The sheets stand in their places, compressed as other streams are, every object stands
 // where the table says, and nothing else has changed.
 func TestAssembledKeepsEveryObject(t *testing.T) {
-	plain, painted, small := bound(t)
-	file, err := assembled(plain, small)
+	plain, painted, sheets := bound(t)
+	file, err := assembled(plain, sheets, &deflater{})
 	if err != nil {
 		t.Fatal(err)
 	}
@@ -94,7 +95,7 @@ func TestDeflatedAlikeOnAnyNumberOfProcessors(t *testing.T) {
 	var first [][]byte
 	for _, n := range []int{1, 2, 7} {
 		runtime.GOMAXPROCS(n)
-		small := deflateAll(painted)
+		small, _ := deflateAll(painted)
 		if first != nil && !slices.EqualFunc(small, first, bytes.Equal) {
 			t.Fatalf("%d processors: other bytes", n)
 		}
@@ -103,7 +104,7 @@ func TestDeflatedAlikeOnAnyNumberOfProcessors(t *testing.T) {
 }
 
 func TestAFileBuiltOtherwiseIsRefused(t *testing.T) {
-	plain, _, small := bound(t)
+	plain, _, sheets := bound(t)
 	for name, file := range map[string][]byte{
 		"empty":        nil,
 		"cut":          plain[:len(plain)/2],
@@ -112,7 +113,7 @@ func TestAFileBuiltOtherwiseIsRefused(t *testing.T) {
 		"no mark":      bytes.Replace(plain, []byte(mark(1)), []byte("% another "), 1),
 		"a wild place": bytes.Replace(plain, []byte("65535 f \n0"), []byte("65535 f \nx"), 1),
 	} {
-		if _, err := assembled(file, small); !errors.Is(err, errStructure) {
+		if _, err := assembled(file, sheets, &deflater{}); !errors.Is(err, errStructure) {
 			t.Errorf("%s: %v", name, err)
 		}
 	}

@@ -100,13 +100,14 @@ type coupling struct {
 }
 
 // newSystem compiles a circuit for a drive frequency. Diodes without leakage are
-// given one that takes off their capacitance at a rate, in 1/s.
-func newSystem(c *circuit.Circuit, frequency, leak float64) (*system, error) {
+// given one that takes off their capacitance at a rate, in 1/s. It shares the room of the state
+// of a similar circuit; of none it has its own.
+func newSystem(c *circuit.Circuit, frequency, leak float64, like *Periodic) (*system, error) {
 	f, err := newFrame(c, frequency)
 	if err != nil {
 		return nil, err
 	}
-	s := &system{c: c, frame: f, omega: 2 * math.Pi * frequency, period: 1 / frequency, n: f.count, room: &room{}}
+	s := &system{c: c, frame: f, omega: 2 * math.Pi * frequency, period: 1 / frequency, n: f.count, room: roomOf(like)}
 	if s.measure(frequency); s.scale == 0 {
 		s.scale = 1 // nothing drives it; any scale serves
 	}
@@ -203,7 +204,7 @@ func (s *system) arrange() {
 			g.add(p.a, p.b)
 		}
 	})
-	s.pattern, s.place = patternOf(g, s.n)
+	s.pattern, s.place = s.room.pattern(g, s.n)
 	s.spans(func(p *span) { p.a, p.b = s.at(p.a), s.at(p.b) })
 }
 

@@ -62,7 +62,7 @@ type change struct {
 
 // begin puts the state of one circuit into the other.
 func (c *change) begin(from, to *Periodic) error {
-	s, err := newSystem(to.Circuit, float64(to.Frequency), smallestLeak*float64(to.Frequency))
+	s, err := newSystem(to.Circuit, float64(to.Frequency), smallestLeak*float64(to.Frequency), to)
 	if err != nil {
 		return err
 	}

@@ -32,7 +32,7 @@ const mostSteps = 50000
 const unnoticed = 1e-8
 
 func newFlight(c *circuit.Circuit, from State) (*flight, error) {
-	s, err := newSystem(c, float64(Drive(c)), slow)
+	s, err := newSystem(c, float64(Drive(c)), slow, nil)
 	if err != nil {
 		return nil, err
 	}

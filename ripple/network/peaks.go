@@ -40,7 +40,7 @@ func newPeaks(s *system) *peaks {
 		g.add(k, n+k)
 	}
 	p := &peaks{walker: newWalker(s)}
-	p.pattern, p.place = patternOf(g, 2*n)
+	p.pattern, p.place = s.room.pattern(g, 2*n)
 	p.base, p.factor, p.diagonal = make([]float64, p.pattern.size()), make([]float64, p.pattern.size()), make([]float64, 2*n)
 	p.pull, p.y, p.u, p.d = make([]float64, 2*n), make([]float64, 2*n), make([]float64, 2*n), make([]float64, 2*n)
 	p.on = make([]bool, 2*len(s.diodes))

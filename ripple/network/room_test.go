@@ -30,3 +30,32 @@ func TestGivenMemoryIsLetGo(t *testing.T) {
 		}
 	}
 }
+
+// A ladder whose values are others has the same pattern, found once; one with another part has
+// its own, and the patterns found last are kept.
+func TestPatternsAreFoundOnce(t *testing.T) {
+	of := func(stages int, like *Periodic) *system {
+		l := ladder{stages: stages, frequency: 20e3, peak: 1e3, capacitance: 1e-9 * float64(stages), current: 1e-4}
+		s, err := compile(build(t, l.describe()), &Options{From: like})
+		if err != nil {
+			t.Fatal(err)
+		}
+		return s
+	}
+	p := steady(t, build(t, ladder{stages: 3, frequency: 20e3, peak: 1e3, capacitance: 1e-9, current: 1e-4}.describe()))
+	if of(3, p).pattern != p.track.pattern {
+		t.Error("the pattern of the same ladder was found again")
+	}
+	for stages := 4; stages < 4+2*mostFound; stages++ {
+		s := of(stages, p)
+		if s.pattern == p.track.pattern || s.pattern.n < p.track.pattern.n {
+			t.Errorf("%d stages have the pattern of three", stages)
+		}
+		if of(stages, p).pattern != s.pattern {
+			t.Errorf("the pattern of %d stages was not kept", stages)
+		}
+	}
+	if len(p.track.room.found) != mostFound {
+		t.Errorf("%d patterns are kept", len(p.track.room.found))
+	}
+}

@@ -102,7 +102,7 @@ func (r *rise) stair(part float64) (*envelope, error) {
 			return true
 		})
 	}
-	s, err := newSystem(c, f, smallestLeak*f)
+	s, err := newSystem(c, f, smallestLeak*f, r.periodic)
 	if err != nil {
 		return nil, err
 	}

@@ -75,11 +75,7 @@ func compile(c *circuit.Circuit, o *Options) (*system, error) {
 	if frequency == 0 {
 		frequency = Drive(c)
 	}
-	s, err := newSystem(c, float64(frequency), smallestLeak*float64(frequency))
-	if err == nil && o.From != nil {
-		s.room = o.From.track.room
-	}
-	return s, err
+	return newSystem(c, float64(frequency), smallestLeak*float64(frequency), o.From)
 }
 
 // attempt is one way to begin a search.

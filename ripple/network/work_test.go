@@ -26,7 +26,7 @@ func TestWork(t *testing.T) {
 func TestInnerLoopsAllocateNothing(t *testing.T) {
 	c := build(t, examples()["12 stages with strays"])
 	f := float64(Drive(c))
-	s, err := newSystem(c, f, smallestLeak*f)
+	s, err := newSystem(c, f, smallestLeak*f, nil)
 	if err != nil {
 		t.Fatal(err)
 	}

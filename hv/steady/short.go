@@ -96,6 +96,9 @@ func quiet(c *circuit.Circuit, bias bool) []tie {
 	return ties
 }
 
+// rounding is the part of the largest charge that is held below which one is nothing.
+const rounding = 1e-13
+
 // deliver lets the shorted circuit run out. What the short carries is what the other
 // elements bring to the nodes it is joined to.
 func (r *rundown) deliver(group []bool) (Delivered, error) {
@@ -108,13 +111,12 @@ func (r *rundown) deliver(group []bool) (Delivered, error) {
 			charge -= q
 		}
 	}
-	for i := range r.wires {
-		if e := r.wires[i].element; group[e.To] != group[e.From] {
-			r.counted = append(r.counted, &r.wires[i])
-		}
-	}
+	r.count(group)
+	held := 0.0
 	for i := range r.stores {
-		bring(&r.stores[i].edge, -r.stores[i].c*r.stores[i].u)
+		q := r.stores[i].c * r.stores[i].u
+		held = math.Max(held, math.Abs(q))
+		bring(&r.stores[i].edge, -q)
 	}
 	r.slacken()
 	p := pace{tolerance: 5e-5, floor: r.highest(), done: 1e-9 * r.highest()}
@@ -128,8 +130,17 @@ func (r *rundown) deliver(group []bool) (Delivered, error) {
 	for i := range r.valves {
 		bring(&r.valves[i].edge, r.valves[i].charge)
 	}
-	if charge == 0 {
+	if math.Abs(charge) <= rounding*held {
 		return Delivered{Work: r.work}, err
 	}
 	return Delivered{magnitude(quantity.Charge(charge)), quantity.Energy(math.Max(0, before-r.energy())), r.work}, err
+}
+
+// count has the charge counted of the wires that lead out of a group of nodes.
+func (r *rundown) count(group []bool) {
+	for i := range r.wires {
+		if e := r.wires[i].element; group[e.To] != group[e.From] {
+			r.counted = append(r.counted, &r.wires[i])
+		}
+	}
 }

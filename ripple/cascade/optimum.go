@@ -44,8 +44,9 @@ func (c Cascade) meanDrop() cubic {
 // StagesForMostOutput finds the number of stages with the largest mean output for
 // the capacitance, drive and load of the cascade, whatever its own number of
 // stages. A lack for unequal capacitors, for no load (the output then grows without
-// limit), and where one period's load moves a capacitor by more than [LargestSwing]
-// of the peak, so that not even one stage could be computed.
+// limit), for one with which a thousand stages would be too few, and where one period's
+// load moves a capacitor by more than [LargestSwing] of the peak, so that not even one
+// stage could be computed.
 func (c Cascade) StagesForMostOutput(load quantity.Current) (Optimum, error) {
 	if err := c.solvable(load); err != nil {
 		return Optimum{}, err
@@ -62,8 +63,17 @@ func (c Cascade) StagesForMostOutput(load quantity.Current) (Optimum, error) {
 		return Optimum{}, lack.Range("one period's load moves a capacitor by %s, more than %g of the %s peak: no number of stages helps",
 			quantity.Text(step), LargestSwing, quantity.Text(c.Peak))
 	}
-	return c.most(step), nil
+	most := c.most(step)
+	if most.Stages > mostStages {
+		return Optimum{}, lack.Range("with so little load every further stage up to %d adds to the output", mostStages)
+	}
+	return most, nil
 }
+
+// mostStages is the number of stages up to which an answer says something: past it strays, which
+// the closed form leaves out, decide (common practice, no source), and a load that is rounding
+// would be answered with millions.
+const mostStages = 1000
 
 func (c Cascade) most(step quantity.Voltage) Optimum {
 	rung := float64(c.rung() / step)

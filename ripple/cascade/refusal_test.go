@@ -117,7 +117,7 @@ func TestPeakNeeded(t *testing.T) {
 
 func TestStagesForMostOutputNeedsALoad(t *testing.T) {
 	c := naidu()
-	for _, i := range []quantity.Current{0, -1, 1} {
+	for _, i := range []quantity.Current{0, 1e-18, -1, 1} {
 		if _, err := c.StagesForMostOutput(i); lack.Of(err) == nil {
 			t.Errorf("%g A: an answer", i)
 		}

@@ -230,12 +230,14 @@ func (f *foothold) back(e *envelope) {
 	e.periods = f.periods
 }
 
-// reach is the number of periods that the next leap may take.
+// reach is the number of periods that the next leap may take: with the period that passes after
+// it, it ends before what is known to lie beyond.
 func (f *foothold) reach(until, level float64) float64 {
 	most := until - f.periods
 	if math.IsInf(f.beyond, 1) {
 		return most
 	}
+	left := f.beyond - f.periods
 	part := (level - f.below) / (f.above - f.below)
-	return math.Min(most, math.Max(1, math.Floor((f.beyond-f.periods)*part)-1))
+	return math.Min(most, math.Max(1, math.Min(math.Floor(left*part)-1, left-2)))
 }

@@ -4,6 +4,8 @@ import (
 	"math"
 	"testing"
 
+	"pgregory.net/rapid"
+
 	"kilovet/hv/quantity"
 )
 
@@ -87,6 +89,20 @@ func TestLeapsAgainstEveryPeriod(t *testing.T) {
 			}
 		}
 	}
+}
+
+// With the period that passes after it a leap ends before what is known to lie beyond, whatever
+// the voltages foretell: else it would be taken again and again.
+func TestLeapsEndBeforeWhatLiesBeyond(t *testing.T) {
+	rapid.Check(t, func(t *rapid.T) {
+		periods := math.Floor(rapid.Float64Range(0, 1e4).Draw(t, "periods"))
+		f := foothold{periods: periods, beyond: periods + math.Floor(rapid.Float64Range(2, 500).Draw(t, "beyond"))}
+		level := rapid.Float64Range(1, 1e5).Draw(t, "level")
+		f.below, f.above = level*rapid.Float64Range(0, 1).Draw(t, "below"), level*rapid.Float64Range(1, 2).Draw(t, "above")
+		if leap := f.reach(math.Inf(1), level); leap < 1 || leap > 1 && periods+leap+1 >= f.beyond {
+			t.Errorf("a leap of %g from %g ends beyond %g", leap, periods, f.beyond)
+		}
+	})
 }
 
 // Periods to 95 % of the no-load output, equal capacitors, ideal source, every pulse

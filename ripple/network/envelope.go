@@ -21,7 +21,9 @@ type envelope struct {
 	from     []float64 // the state before the leap
 	start    []float64 // its change over a period
 	k1, k2   []float64
-	foreseen []float64 // change over the period after a leap
+	landed   []float64 // the state after the last leap
+	foreseen []float64 // change over the period after it, or over the next
+	doubtful bool      // what is foreseen after leaps
 	linear   *track    // of the period at the start of the leap
 	spare    *track
 	ahead    float64 // γH of the equations in hand
@@ -32,7 +34,7 @@ type envelope struct {
 func newEnvelope(s *shooter) *envelope {
 	m := len(s.x)
 	return &envelope{shooter: s, leap: 1, from: make([]float64, m), start: make([]float64, m),
-		k1: make([]float64, m), k2: make([]float64, m), foreseen: make([]float64, m), linear: s.pace.track, spare: &track{system: s.system}}
+		k1: make([]float64, m), k2: make([]float64, m), foreseen: make([]float64, m), landed: make([]float64, m), linear: s.pace.track, spare: &track{system: s.system}}
 }
 
 // What a leap may be wrong by: a part of the state where time matters, a part of
@@ -42,9 +44,14 @@ const (
 	detour    = 0.3
 )
 
-// wandering is the part of its change by which a period after a leap may differ from what was
-// foreseen of it: with more, currents of ladders with stiff diodes were up to a sixth off.
-const wandering = 0.01
+// The parts of its change by which a period after a leap may differ from what was foreseen of
+// it: with more than the first, currents of ladders with stiff diodes were up to a sixth off,
+// and one more period sets them right; with more than the second the leap itself suffers, and
+// its period is walked.
+const (
+	wandering = 0.01
+	lost      = 0.1
+)
 
 // coarse is the part of a diode's mean current that may flow or fail to flow before its
 // switching is located, where a period need not come back to its start: it does so for a
@@ -87,7 +94,9 @@ func (e *envelope) advance(most float64) error {
 		if wrong <= limit {
 			e.periods += e.leap
 			if e.leap > 1 && !e.hurried {
-				e.relax()
+				if err := e.relax(); err != nil {
+					return err
+				}
 			}
 			e.leap *= math.Max(0.5, math.Min(3, more))
 			return nil
@@ -114,9 +123,11 @@ func (e *envelope) single() {
 }
 
 // relax lets a single period pass after a leap, which leaves the swift modes less exact
-// than the envelope: they decide the currents. It is the period that was walked from where
-// the first order leads, and what the change to the second makes of it.
-func (e *envelope) relax() {
+// than the envelope: they decide the currents. Foreseen, it is the period that was walked from
+// where the first order leads, and what the change to the second makes of it; where that did
+// not hold after the leap before, it is walked.
+func (e *envelope) relax() error {
+	copy(e.landed, e.x)
 	x := e.foreseen
 	copy(x, e.x)
 	axpy(-1, e.from, x)
@@ -124,19 +135,50 @@ func (e *envelope) relax() {
 	e.minus(e.spare, x)
 	scaleBy(x, -1)
 	axpy(1, e.r, x)
+	if e.doubtful {
+		return e.relaxWalking()
+	}
 	axpy(1, x, e.x)
 	e.periods++
 	copy(e.step, x)
 	e.minus(e.spare, e.step)
 	axpy(-1, e.step, x)
+	return nil
+}
+
+// relaxWalking walks the period after a leap, and tells whether the next may be foreseen again.
+func (e *envelope) relaxWalking() error {
+	copy(e.x, e.landed)
+	if err := e.walk(); err != nil {
+		return err
+	}
+	copy(e.start, e.r)
+	e.doubtful = e.wandered() > lost
+	axpy(1, e.r, e.x)
+	e.periods++
+	return nil
 }
 
 // wandered is by how much the change over the period walked last differs from what was foreseen
-// when the one before it was let pass, in parts of it.
+// of it, in parts of it.
 func (e *envelope) wandered() float64 {
 	copy(e.step, e.start)
 	axpy(-1, e.foreseen, e.step)
 	return norm(e.step) / (norm(e.start) + 1e-30)
+}
+
+// again takes back the period that passed after the leap where the one after it is not as
+// foreseen, and walks it; it reports whether it did.
+func (e *envelope) again() (bool, error) {
+	if e.doubtful || e.wandered() <= lost {
+		return false, nil
+	}
+	e.periods--
+	if err := e.relaxWalking(); err != nil {
+		return false, err
+	}
+	e.doubtful = true
+	return true, nil
 }
 
 // try takes the leap from the state before it and returns how far the first order

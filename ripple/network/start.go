@@ -153,7 +153,7 @@ func (r *rise) climb(e *envelope, until float64) (done bool, err error) {
 	}()
 	e.periods = r.periods
 	at := newFoothold(e)
-	for range 400 {
+	for leaps := 0; leaps < 400 || r.options.every; leaps++ {
 		if e.periods >= until {
 			return false, nil
 		}
@@ -177,9 +177,8 @@ func (r *rise) tread(e *envelope, at *foothold) (done bool, err error) {
 	leapt := e.periods-at.periods > 1
 	at.track, e.linear = e.linear, at.track
 	up, err := r.look(e)
-	if err == nil && leapt && e.periods+1 < at.beyond && e.wandered() > wandering {
-		e.pass()
-		up, err = r.look(e)
+	if err == nil && leapt {
+		up, err = r.better(e, at, up)
 	}
 	if err != nil {
 		return false, err
@@ -199,6 +198,22 @@ func (r *rise) tread(e *envelope, at *foothold) (done bool, err error) {
 		at.hold(e)
 	}
 	return false, nil
+}
+
+// better looks again where the period after a leap was not the one foreseen: it is walked, or,
+// where little is amiss, another passes.
+func (r *rise) better(e *envelope, at *foothold, up bool) (bool, error) {
+	walked, err := e.again()
+	if err != nil {
+		return false, err
+	}
+	if !walked {
+		if e.doubtful || e.wandered() <= wandering || e.periods+1 >= at.beyond {
+			return up, nil
+		}
+		e.pass()
+	}
+	return r.look(e)
 }
 
 // foothold is the last state at which the node had not come up, with its period.

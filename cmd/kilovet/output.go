@@ -30,12 +30,12 @@ func replaceAll(outputs []output) error {
 		}
 	}
 	parts, errs := make([]part, len(outputs)), make([]error, len(outputs))
-	parallel.Each(len(outputs), func(i int) { parts[i], errs[i] = outputs[i].beside() })
 	defer func() {
 		for _, p := range parts {
 			p.giveUp()
 		}
 	}()
+	parallel.Each(len(outputs), func(i int) { parts[i], errs[i] = outputs[i].beside() })
 	for i, err := range errs {
 		if err != nil {
 			return unwritten(outputs, i, 0, err)

@@ -73,6 +73,20 @@ func (r *reviewing) render(review *rules.Review, note string) (outputs []output,
 	return slices.DeleteFunc(outputs, func(o output) bool { return o.path == "" }), text.Render(review, how), nil
 }
 
+// begin prepares what does not depend on the description, while that is read.
+func (r *reviewing) begin() {
+	makeRoom()
+	if r.pdf != "" {
+		r.press = pdf.Begin(pdf.Paper(r.paper))
+	}
+	if r.html != "" {
+		go func() {
+			defer func() { _ = recover() }() // the page itself meets it again, and tells
+			html.Prepare()
+		}()
+	}
+}
+
 // maker makes an output; one without a path only sees that results could be made.
 type maker struct {
 	path string

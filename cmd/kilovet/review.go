@@ -17,7 +17,6 @@ import (
 	"kilovet/hv/chain"
 	"kilovet/hv/document"
 	"kilovet/reports/digest"
-	"kilovet/reports/html"
 	"kilovet/reports/pdf"
 	"kilovet/reports/text"
 	"kilovet/rules"
@@ -113,17 +112,6 @@ func (r *reviewing) run(args []string) error {
 		return exitf(unsound, "%s left out: nothing of that was judged", strings.Join(r.without, " and "))
 	}
 	return verdict(review, concerns)
-}
-
-// begin prepares what does not depend on the description, while that is read.
-func (r *reviewing) begin() {
-	makeRoom()
-	if r.pdf != "" {
-		r.press = pdf.Begin(pdf.Paper(r.paper))
-	}
-	if r.html != "" {
-		go html.Prepare()
-	}
 }
 
 // source is a description before it is understood.

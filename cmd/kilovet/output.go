@@ -212,9 +212,9 @@ func fill(file *os.File, data []byte) error {
 	return errors.Join(err, file.Sync(), file.Close())
 }
 
-// same reports whether two paths are one file.
+// same reports whether two paths are one file, or would be.
 func same(p, q string) bool {
-	if filepath.Clean(p) == filepath.Clean(q) {
+	if resolved(p) == resolved(q) {
 		return true
 	}
 	a, err := os.Stat(p)
@@ -223,4 +223,15 @@ func same(p, q string) bool {
 	}
 	b, err := os.Stat(q)
 	return err == nil && a.Mode().IsRegular() && os.SameFile(a, b)
+}
+
+// resolved is a path without links, as far as there is something.
+func resolved(path string) string {
+	if whole, err := filepath.EvalSymlinks(path); err == nil {
+		return whole
+	}
+	if folder, err := filepath.EvalSymlinks(filepath.Dir(path)); err == nil {
+		return filepath.Join(folder, filepath.Base(path))
+	}
+	return filepath.Clean(path)
 }

@@ -9,20 +9,24 @@ import (
 type followed struct {
 	*track
 	du, damps []float64 // changes at fixed instants, as the track keeps potentials and currents
+	pulses    []pulse
 	later     []float64 // by which the end of each step moves
 	misplaced float64   // the largest charge that is lost sight of at a switching
 }
 
-// unlike is the part by which a step may become longer or shorter.
-const unlike = 0.1
+// bearing is what a change that is followed to first order may do.
+type bearing struct {
+	misplaced float64 // charge lost sight of at a switching
+	faint     float64 // part by which steps become longer or shorter and pulses of current change: the square of it is lost
+}
 
 // follow changes a track as a small change of charges and inductor currents at its start
 // does, to first order: by what it makes of every instant, and by moving the instants of
 // switching, with those between them in proportion. Between those the network is linear, so
-// what is lost is what a diode that switches earlier or later passes meanwhile. It reports
-// whether that is no more than a charge; else the track is as it was. The factors are not
-// those of the changed steps.
-func (t *track) follow(dq, di []float64, lanes []trio, most float64) bool {
+// what is lost is what a diode that switches earlier or later passes meanwhile, and what the
+// pulses of current bend. It reports whether the change is bearable; else the track is as it
+// was. The factors are not those of the changed steps.
+func (t *track) follow(dq, di []float64, lanes []trio, most bearing) bool {
 	f := changes.Get().(*followed)
 	defer func() { f.track = nil; changes.Put(f) }()
 	f.track, f.misplaced = t, 0
@@ -30,7 +34,7 @@ func (t *track) follow(dq, di []float64, lanes []trio, most float64) bool {
 	for k := range t.steps {
 		f.carryOver(k, dq, di, lanes)
 	}
-	if !f.delay() || !(f.misplaced <= most) {
+	if !f.delay(most.faint) || !(f.misplaced <= most.misplaced) || !f.faint(most.faint) {
 		return false
 	}
 	for k := range t.steps {
@@ -70,9 +74,52 @@ func (f *followed) carryOver(k int, dq, di []float64, lanes []trio) {
 	f.charge(f.du[(4*k+3)*n:(4*k+4)*n], dq)
 }
 
-// delay finds by how much the end of each step moves, and reports whether all steps stay
-// about as they are. Where diodes settled, nothing moves.
-func (f *followed) delay() bool {
+// pulse is a diode's current over a period: what the change makes of the charge that passes and
+// of the largest current at a stage of a step.
+type pulse struct {
+	charge, more float64 // passed, and more after the change
+	peak, then   float64 // before the change, and after it
+}
+
+// faint reports whether the change makes no more than a part of the diodes' currents: of the
+// largest charge, and of each peak, or of the largest a hundredth of that.
+func (f *followed) faint(part float64) bool {
+	f.pulses = f.pulses[:0]
+	charge, peak := 0.0, 0.0
+	for i := range f.diodes {
+		p := f.pulse(i)
+		f.pulses = append(f.pulses, p)
+		charge, peak = math.Max(charge, p.charge), math.Max(peak, p.peak)
+	}
+	for _, p := range f.pulses {
+		if !(math.Abs(p.more) <= part*charge && math.Abs(p.then-p.peak) <= part*math.Max(p.peak, 0.01*peak)) {
+			return false
+		}
+	}
+	return true
+}
+
+func (f *followed) pulse(i int) (p pulse) {
+	d := &f.diodes[i]
+	for k := range f.steps {
+		if !f.conducting(k)[i] {
+			continue
+		}
+		y, along := f.stages(k, &d.span), f.along(k)
+		for j, c := range share {
+			amps, more := d.on*(y[j+1]-d.drop), d.on*d.difference(f.du[(4*k+j+1)*f.n:(4*k+j+2)*f.n])
+			p.charge += c * f.steps[k].length * amps
+			p.more += c * f.steps[k].length * more
+			p.peak = math.Max(p.peak, math.Abs(amps))
+			p.then = math.Max(p.then, math.Abs(amps+more+d.on*along[j]*slopeAt(j, &y)))
+		}
+	}
+	return p
+}
+
+// delay finds by how much the end of each step moves, and reports whether no step becomes longer
+// or shorter by more than a part. Where diodes settled, nothing moves.
+func (f *followed) delay(most float64) bool {
 	first, since := 0, 0.0 // of the steps from the last switching on, and by how much that moves
 	for k := range f.steps {
 		end := &f.steps[k]
@@ -89,7 +136,7 @@ func (f *followed) delay() bool {
 		}
 		from, to := f.steps[first].start, end.start+end.length
 		change := (until - since) / (to - from)
-		if !(math.Abs(change) <= unlike) {
+		if !(math.Abs(change) <= most) {
 			return false
 		}
 		for j := first; j <= k; j++ {
@@ -128,16 +175,8 @@ func slopeAt(stage int, y *samples) float64 {
 // move changes a step.
 func (f *followed) move(k int) {
 	st := &f.steps[k]
-	from, to := 0.0, f.later[k]
-	if k > 0 && !st.jump {
-		from = f.later[k-1]
-	}
-	var along [3]float64 // by how many steps the stages move
-	if !st.euler {
-		for j, c := range [3]float64{node1, node2, 1} {
-			along[j] = (from + (to-from)*c) / st.length
-		}
-	}
+	from, to := f.ends(k)
+	along := f.along(k)
 	f.moveRows(f.u, f.du, k, f.n, &along)
 	f.moveRows(f.amps, f.damps, k, len(f.inductors), &along)
 	y := samples(st.sine)
@@ -149,6 +188,26 @@ func (f *followed) move(k int) {
 	}
 	st.start += from
 	st.length += to - from
+}
+
+// ends are by how much the start and the end of a step move.
+func (f *followed) ends(k int) (from, to float64) {
+	if k > 0 && !f.steps[k].jump {
+		from = f.later[k-1]
+	}
+	return from, f.later[k]
+}
+
+// along is by how many steps the stages of a step move; where diodes settled, by none.
+func (f *followed) along(k int) (along [3]float64) {
+	if f.steps[k].euler {
+		return along
+	}
+	from, to := f.ends(k)
+	for j, c := range [3]float64{node1, node2, 1} {
+		along[j] = (from + (to-from)*c) / f.steps[k].length
+	}
+	return along
 }
 
 // moveRows changes the potentials or the currents of a step, n at the start and at each

@@ -57,7 +57,7 @@ func (s *search) changed(t *testing.T, part float64) (carried, walked, unchanged
 	copy(s.step, x)
 	scaleBy(s.step, part)
 	s.unpack(s.step, s.root, s.dq, s.di)
-	if !carried.track.follow(s.dq, s.di, s.lanes, math.Inf(1)) {
+	if !carried.track.follow(s.dq, s.di, s.lanes, bearing{math.Inf(1), 0.1}) {
 		t.Fatal("not followed")
 	}
 	axpy(1, s.step, s.x)

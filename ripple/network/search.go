@@ -183,13 +183,17 @@ func (s *search) improve(g grade, size float64, done func() bool) (finished bool
 // the period instead of walking it again.
 const slight = 1e-5
 
+// faint is the part by which such a correction may change steps and pulses of current.
+const faint = 0.01
+
 // carryThrough carries the correction in hand through the period walked last, to the end of the
-// search. It reports whether that misplaces so little charge that neither the balance nor, by
-// the largest correction that a charge ever asked for, the state suffers.
+// search. It reports whether the currents change so faintly, and so little charge is misplaced,
+// that neither they nor the balance nor, by the largest correction that a charge ever asked for,
+// the state suffers.
 func (s *search) carryThrough() bool {
 	bears := s.small() * norm(s.x) * math.Sqrt(s.typical) / s.amplified
 	s.unpack(s.step, s.root, s.dq, s.di)
-	if !s.linear.follow(s.dq, s.di, s.lanes, math.Min(swiftly*s.pace.passed, bears)) {
+	if !s.linear.follow(s.dq, s.di, s.lanes, bearing{math.Min(swiftly*s.pace.passed, bears), faint}) {
 		return false
 	}
 	axpy(1, s.step, s.x)

@@ -124,7 +124,8 @@ func (p *Periodic) flow(list []branch) (f Flow, impulse bool) {
 
 // peak raises a peak to the largest magnitude over a step. Where a diode has just
 // switched the start may be passed over: the stages then ring about the current that
-// follows, of which the end of the step and the next step tell.
+// follows, of which the end of the step and the next step tell. Between the two the
+// magnitude passes from one to the other, so that a slight change makes a slight one.
 func (y *samples) peak(euler bool, most float64) float64 {
 	most = math.Max(most, math.Abs(y[3]))
 	if euler {
@@ -140,11 +141,14 @@ func (y *samples) peak(euler bool, most float64) float64 {
 	if low, high := p.hull(); low >= -most && high <= most {
 		return most
 	}
-	if b := parabola(y[1], y[2], y[3]); math.Abs(y[0]-b[0]) > 0.02*math.Abs(b[0]) {
+	b := parabola(y[1], y[2], y[3])
+	smooth := math.Min(1, 2-math.Abs(y[0]-b[0])/(0.02*math.Abs(b[0])))
+	if !(smooth > 0) {
 		return most
 	}
+	end := math.Abs(y[3])
 	for _, x := range p.turns() {
-		most = math.Max(most, math.Abs(p.at(x)))
+		most = math.Max(most, end+smooth*(math.Abs(p.at(x))-end))
 	}
 	return most
 }

@@ -193,6 +193,22 @@ func TestNothingHappensByItself(t *testing.T) {
 	}
 }
 
+func TestDrawsAreTheSameEachTime(t *testing.T) {
+	for _, s := range sources(t) {
+		if s.folder == "hv/chance" {
+			continue
+		}
+		ast.Inspect(s.file, func(n ast.Node) bool {
+			if call, ok := n.(*ast.SelectorExpr); ok {
+				if x, ok := call.X.(*ast.Ident); ok && x.Name == "rapid" && call.Sel.Name == "Check" {
+					t.Errorf("%s draws other cases each time: chance.Check does not", s.set.Position(n.Pos()))
+				}
+			}
+			return true
+		})
+	}
+}
+
 func TestEveryPackageSaysWhatItIs(t *testing.T) {
 	documented := map[string]bool{}
 	for _, s := range sources(t) {

@@ -4,6 +4,7 @@ import (
 	"strings"
 	"testing"
 
+	"kilovet/hv/chance"
 	"kilovet/hv/lack"
 	"kilovet/hv/quantity"
 	"kilovet/insulation"
@@ -81,7 +82,7 @@ func TestFunctionalInsulationPastTheTable(t *testing.T) {
 	if len(a.Assumptions) != 1 || a.Sources[0].Mark != gap.Derived || a.Value < 130e-3 || a.Value > 250e-3 {
 		t.Errorf("80 kV: %v by %v, assumptions %v", a.Value, a.Sources, a.Assumptions)
 	}
-	rapid.Check(t, func(rt *rapid.T) {
+	chance.Check(t, func(rt *rapid.T) {
 		v := quantity.Voltage(rapid.Float64Range(40e3, 200e3).Draw(rt, "peak"))
 		if lo, hi := clearance(t, g, gap.Voltages{Peak: v}), clearance(t, g, gap.Voltages{Peak: v * 1.001}); hi.Value <= lo.Value {
 			rt.Fatalf("%v needs %v, a thousandth more %v", v, lo.Value, hi.Value)

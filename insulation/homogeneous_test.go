@@ -5,6 +5,7 @@ import (
 
 	"pgregory.net/rapid"
 
+	"kilovet/hv/chance"
 	"kilovet/insulation"
 	"kilovet/insulation/gap"
 
@@ -14,7 +15,7 @@ import (
 // What is needed between electrodes of a radius does not ask how far apart they are: case B
 // and the factor of the frequency take the radius beside the clearance that is needed.
 func TestAWiderGapNeedsNoMore(t *testing.T) {
-	rapid.Check(t, func(rt *rapid.T) {
+	chance.Check(t, func(rt *rapid.T) {
 		g := bench()
 		g.Altitude = new(quantity.Length(rapid.Float64Range(0, 6000).Draw(rt, "altitude")))
 		g.ImpulseTested = rapid.Bool().Draw(rt, "tested")

@@ -5,6 +5,7 @@ import (
 	"strings"
 	"testing"
 
+	"kilovet/hv/chance"
 	"kilovet/hv/lack"
 	"kilovet/hv/quantity"
 	"kilovet/insulation"
@@ -15,7 +16,7 @@ import (
 
 // Every inversion undoes its law to 1e-6, where the law rises.
 func TestInversionsUndoTheirLaws(t *testing.T) {
-	rapid.Check(t, func(rt *rapid.T) {
+	chance.Check(t, func(rt *rapid.T) {
 		g := drawn(rt)
 		if g.Shape == nil || g.Shape.Kind == gap.Plates {
 			g.Shape = &gap.Shape{Kind: gap.SpherePlane, Radius: g.Clearance}
@@ -82,7 +83,7 @@ func TestInversionsWithoutAShape(t *testing.T) {
 }
 
 func TestPeakByTableUndoesTheClearance(t *testing.T) {
-	rapid.Check(t, func(rt *rapid.T) {
+	chance.Check(t, func(rt *rapid.T) {
 		g := bench()
 		g.Altitude = new(quantity.Length(rapid.Float64Range(0, 15000).Draw(rt, "altitude")))
 		g.Insulation = rapid.SampledFrom([]gap.Insulation{gap.Functional, gap.Basic, gap.Reinforced}).Draw(rt, "class")

@@ -5,6 +5,7 @@ import (
 	"math"
 	"testing"
 
+	"kilovet/hv/chance"
 	"kilovet/hv/lack"
 	"kilovet/hv/quantity"
 	"kilovet/insulation"
@@ -55,7 +56,7 @@ func TestCaseAHoldsTwiceTheNeedleGap(t *testing.T) {
 // shape, up to the pressure of 2000 m and beyond it with the altitude factor; plates of
 // case B do so within 9 %.
 func TestATabledClearanceHolds(t *testing.T) {
-	rapid.Check(t, func(rt *rapid.T) {
+	chance.Check(t, func(rt *rapid.T) {
 		g := bench()
 		g.Altitude = new(quantity.Length(rapid.Float64Range(0, 9000).Draw(rt, "altitude")))
 		g.Temperature = 293.15
@@ -101,7 +102,7 @@ func drawn(rt *rapid.T) gap.Gap {
 // More distance, a rounder edge, a lower place, a cleaner surface never lower the
 // breakdown or the onset.
 func TestNothingBetterStandsLess(t *testing.T) {
-	rapid.Check(t, func(rt *rapid.T) {
+	chance.Check(t, func(rt *rapid.T) {
 		g := drawn(rt)
 		more := quantity.Length(rapid.Float64Range(1.001, 1.5).Draw(rt, "more"))
 		polarity := rapid.SampledFrom([]gap.Polarity{gap.Unknown, gap.Positive, gap.Negative}).Draw(rt, "polarity")

@@ -4,6 +4,7 @@ import (
 	"math"
 	"testing"
 
+	"kilovet/hv/chance"
 	"kilovet/hv/lack"
 	"kilovet/hv/quantity"
 	"kilovet/insulation"
@@ -98,7 +99,7 @@ func TestSurfaceCounted(t *testing.T) {
 
 // The radius for a breakdown and the length of surface for a flashover undo their laws.
 func TestInversionsByRadiusAndSurface(t *testing.T) {
-	rapid.Check(t, func(rt *rapid.T) {
+	chance.Check(t, func(rt *rapid.T) {
 		g := drawn(rt)
 		if g.Shape == nil || g.Shape.Kind == gap.Plates {
 			rt.Skip()

@@ -11,6 +11,7 @@ import (
 
 	"pgregory.net/rapid"
 
+	"kilovet/hv/chance"
 	"kilovet/hv/document"
 )
 
@@ -104,7 +105,7 @@ func TestOneFaultStaysOne(t *testing.T) {
 // document order, and nothing else is.
 func TestManyFaultsAtOnce(t *testing.T) {
 	lines := wholeDraft(t)
-	rapid.Check(t, func(t *rapid.T) {
+	chance.Check(t, func(t *rapid.T) {
 		changed := slices.Clone(lines)
 		share := rapid.IntRange(1, 40).Draw(t, "one in")
 		var want, got []int

@@ -6,6 +6,8 @@ import (
 	"testing"
 
 	"pgregory.net/rapid"
+
+	"kilovet/hv/chance"
 )
 
 // shape writes a circuit out, so that two can be compared.
@@ -102,7 +104,7 @@ func TestReverseTurnsADiodeRound(t *testing.T) {
 // An edit that keeps everything keeps everything; nodes and labels always agree.
 func TestNodesAndLabelsAgree(t *testing.T) {
 	c := build(whole())
-	rapid.Check(t, func(r *rapid.T) {
+	chance.Check(t, func(r *rapid.T) {
 		names := c.Names()
 		edited := c.Each(func(*Element) bool { return true })
 		if shape(edited) != shape(c) {

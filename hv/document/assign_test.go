@@ -7,6 +7,7 @@ import (
 
 	"pgregory.net/rapid"
 
+	"kilovet/hv/chance"
 	"kilovet/hv/document"
 )
 
@@ -48,7 +49,7 @@ func TestWhatIsNoNumberIsRefusedAsText(t *testing.T) {
 
 // Whatever is written stays within its own line and is read back as it was.
 func TestAssignKeepsEveryText(t *testing.T) {
-	rapid.Check(t, func(t *rapid.T) {
+	chance.Check(t, func(t *rapid.T) {
 		text := rapid.String().Draw(t, "text")
 		line := assign("text", text)
 		if strings.Contains(line, "\n") {

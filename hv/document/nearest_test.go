@@ -5,6 +5,8 @@ import (
 	"unicode/utf8"
 
 	"pgregory.net/rapid"
+
+	"kilovet/hv/chance"
 )
 
 func TestNearest(t *testing.T) {
@@ -36,7 +38,7 @@ func TestSlips(t *testing.T) {
 // word, and at least the difference of the lengths.
 func TestSlipsAreADistance(t *testing.T) {
 	word := rapid.SliceOfN(rapid.RuneFrom([]rune("abcµ")), 0, 8)
-	rapid.Check(t, func(t *rapid.T) {
+	chance.Check(t, func(t *rapid.T) {
 		a, b := word.Draw(t, "a"), word.Draw(t, "b")
 		d := slips(a, b)
 		longer, shorter := max(len(a), len(b)), min(len(a), len(b))
@@ -48,7 +50,7 @@ func TestSlipsAreADistance(t *testing.T) {
 
 // TestCursor holds the place of any offset, asked for in any order, against counting.
 func TestCursor(t *testing.T) {
-	rapid.Check(t, func(t *rapid.T) {
+	chance.Check(t, func(t *rapid.T) {
 		text := string(rapid.SliceOfN(rapid.RuneFrom([]rune("aµ\n€")), 0, 40).Draw(t, "text"))
 		c := newCursor(text)
 		for range 8 {

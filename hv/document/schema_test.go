@@ -16,6 +16,7 @@ import (
 	"pgregory.net/rapid"
 
 	"kilovet/hv/chain"
+	"kilovet/hv/chance"
 	"kilovet/hv/document"
 	"kilovet/hv/quantity"
 )
@@ -275,7 +276,7 @@ func TestPatternAgreesWithTheParser(t *testing.T) {
 	units = append(units, "µm", "μA", "MΩ", "k\u2126", "mm²", "kg/m³", "ohm\u00a0m", "v", "")
 	numbers := []string{"1", "0", "12.", ".5", "7.25", "e3", "E-2", "e", "-", "+", "\u2212", ",", "_", "nan", "inf", ""}
 	gaps := []string{"", " ", "  ", "\t", "\n", "\u00a0", "\u2009", "\u0085", "x"}
-	rapid.Check(t, func(t *rapid.T) {
+	chance.Check(t, func(t *rapid.T) {
 		some := func(of []string, least, most int) string {
 			return strings.Join(rapid.SliceOfN(rapid.SampledFrom(of), least, most).Draw(t, "pieces"), "")
 		}

@@ -7,6 +7,7 @@ import (
 
 	"pgregory.net/rapid"
 
+	"kilovet/hv/chance"
 	"kilovet/hv/gun"
 	"kilovet/hv/lack"
 	"kilovet/hv/quantity"
@@ -76,7 +77,7 @@ func TestLawRefusesWhatItDoesNotKnow(t *testing.T) {
 
 // A law made through a reading gives the reading back, limit or not.
 func TestThroughAReading(t *testing.T) {
-	rapid.Check(t, func(t *rapid.T) {
+	chance.Check(t, func(t *rapid.T) {
 		cutoff := rapid.Float64Range(1, 1e4).Draw(t, "cutoff")
 		exponent := rapid.Float64Range(1, 4).Draw(t, "exponent")
 		bias := quantity.Voltage(cutoff * rapid.Float64Range(0, 0.999).Draw(t, "bias"))
@@ -119,7 +120,7 @@ func TestLimitOfTheCathode(t *testing.T) {
 
 // Both laws hold at the operating point, whatever the gun.
 func TestSelfBiasHoldsBothLaws(t *testing.T) {
-	rapid.Check(t, func(t *rapid.T) {
+	chance.Check(t, func(t *rapid.T) {
 		law, err := gun.New(
 			quantity.Voltage(math.Pow(10, rapid.Float64Range(0, 4).Draw(t, "log cutoff"))),
 			rapid.Float64Range(1, 5).Draw(t, "exponent"),

@@ -6,6 +6,7 @@ import (
 
 	"pgregory.net/rapid"
 
+	"kilovet/hv/chance"
 	"kilovet/hv/gun"
 	"kilovet/hv/lack"
 	"kilovet/hv/quantity"
@@ -41,7 +42,7 @@ func TestLoopOfASelfBiasedGun(t *testing.T) {
 
 // The sensitivities are the slopes of the solved points themselves.
 func TestSensitivitiesAreSlopes(t *testing.T) {
-	rapid.Check(t, func(t *rapid.T) {
+	chance.Check(t, func(t *rapid.T) {
 		n := rapid.Float64Range(1, 4).Draw(t, "exponent")
 		resistor := quantity.Resistance(math.Pow(10, rapid.Float64Range(4, 8).Draw(t, "log resistor")))
 		limit := quantity.Current(math.Pow(10, rapid.Float64Range(-5, -2).Draw(t, "log limit")))

@@ -5,6 +5,8 @@ import (
 	"testing"
 
 	"pgregory.net/rapid"
+
+	"kilovet/hv/chance"
 )
 
 func near(t *testing.T, what string, got, want float64) {
@@ -31,7 +33,7 @@ func TestACommonErrorByHand(t *testing.T) {
 // A common error can only excuse, never accuse; an error in common to all readings of
 // a scaled prediction excuses it all but for own errors.
 func TestCommonErrorsExcuse(t *testing.T) {
-	rapid.Check(t, func(t *rapid.T) {
+	chance.Check(t, func(t *rapid.T) {
 		n := rapid.IntRange(1, 8).Draw(t, "n")
 		value := rapid.Float64Range(0.1, 100)
 		read, predicted, own, of := make([]float64, n), make([]float64, n), make([]float64, n), make([]bool, n)

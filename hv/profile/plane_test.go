@@ -4,6 +4,8 @@ import (
 	"testing"
 
 	"pgregory.net/rapid"
+
+	"kilovet/hv/chance"
 )
 
 func made(t *testing.T, name string, strokes ...Stroke) Profile {
@@ -59,7 +61,7 @@ func TestFaces(t *testing.T) {
 
 // Euler: nodes − edges + faces = 1 + parts that hang together.
 func TestEuler(t *testing.T) {
-	rapid.Check(t, func(rt *rapid.T) {
+	chance.Check(t, func(rt *rapid.T) {
 		var profiles []Profile
 		for range rapid.IntRange(1, 5).Draw(rt, "rings") {
 			grid := rapid.IntRange(1, 9)
@@ -92,7 +94,7 @@ func TestEuler(t *testing.T) {
 
 // A point lies in a rectangle or not, however many others are drawn over it.
 func TestInsideAgreesWithCoordinates(t *testing.T) {
-	rapid.Check(t, func(rt *rapid.T) {
+	chance.Check(t, func(rt *rapid.T) {
 		type box struct{ r, z, w, h float64 }
 		var boxes []box
 		var profiles []Profile

@@ -6,6 +6,7 @@ import (
 
 	"pgregory.net/rapid"
 
+	"kilovet/hv/chance"
 	"kilovet/hv/quantity"
 )
 
@@ -65,7 +66,7 @@ func drawSegment(t *rapid.T, label string) Segment {
 }
 
 func TestPartsAddUp(t *testing.T) {
-	rapid.Check(t, func(t *rapid.T) {
+	chance.Check(t, func(t *rapid.T) {
 		s, f := drawSegment(t, "s"), rapid.Float64Range(0.05, 0.95).Draw(t, "cut")
 		a, b := s.Part(0, f), s.Part(f, 1)
 		if sum := a.Length() + b.Length(); !near1(float64(sum), float64(s.Length()), 1e-9) {
@@ -78,7 +79,7 @@ func TestPartsAddUp(t *testing.T) {
 }
 
 func TestClosestIsClosest(t *testing.T) {
-	rapid.Check(t, func(t *rapid.T) {
+	chance.Check(t, func(t *rapid.T) {
 		s := drawSegment(t, "s")
 		p := at(rapid.Float64Range(-6, 6).Draw(t, "r"), rapid.Float64Range(-6, 6).Draw(t, "z"))
 		f, d := s.Closest(p)
@@ -94,7 +95,7 @@ func TestClosestIsClosest(t *testing.T) {
 }
 
 func TestMeetIsMutual(t *testing.T) {
-	rapid.Check(t, func(t *rapid.T) {
+	chance.Check(t, func(t *rapid.T) {
 		a, b := drawSegment(t, "a"), drawSegment(t, "b")
 		for _, p := range meet(a, b, 1e-6) {
 			_, da := a.Closest(p)

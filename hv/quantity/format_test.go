@@ -6,6 +6,8 @@ import (
 	"testing"
 
 	"pgregory.net/rapid"
+
+	"kilovet/hv/chance"
 )
 
 func TestText(t *testing.T) {
@@ -41,7 +43,7 @@ func TestTextOfWhatIsNoNumberDoesNotPanic(t *testing.T) {
 // TestComparisons: what differs by less than 1e-9 counts as equal, what differs by
 // more does not, whatever the size.
 func TestComparisons(t *testing.T) {
-	rapid.Check(t, func(t *rapid.T) {
+	chance.Check(t, func(t *rapid.T) {
 		size := math.Pow(10, rapid.Float64Range(-15, 15).Draw(t, "decade"))
 		v := Voltage(rapid.Float64Range(1, 10).Draw(t, "value") * size * float64(rapid.SampledFrom([]int{-1, 1}).Draw(t, "sign")))
 		within := v * Voltage(1+rapid.Float64Range(-0.9e-9, 0.9e-9).Draw(t, "within"))

@@ -6,6 +6,8 @@ import (
 	"testing"
 
 	"pgregory.net/rapid"
+
+	"kilovet/hv/chance"
 )
 
 func TestAccepted(t *testing.T) {
@@ -139,7 +141,7 @@ func TestPrefixes(t *testing.T) {
 // TestTextReadsBack: what is written for people can be read, and is the value to
 // four significant digits.
 func TestTextReadsBack(t *testing.T) {
-	rapid.Check(t, func(t *rapid.T) {
+	chance.Check(t, func(t *rapid.T) {
 		d := rapid.SampledFrom(dimensions).Draw(t, "dimension")
 		u := rapid.SampledFrom(d.units).Draw(t, "unit")
 		mantissa := rapid.Float64Range(1, 999).Draw(t, "mantissa")
@@ -157,7 +159,7 @@ func TestTextReadsBack(t *testing.T) {
 
 // TestSpacesAndSignsDoNotMatter: any way to write one value is the same value.
 func TestSpacesAndSignsDoNotMatter(t *testing.T) {
-	rapid.Check(t, func(t *rapid.T) {
+	chance.Check(t, func(t *rapid.T) {
 		d := rapid.SampledFrom(dimensions).Draw(t, "dimension")
 		symbol := rapid.SampledFrom(d.Units()).Draw(t, "unit")
 		number := rapid.StringMatching(`[0-9]{1,3}(\.[0-9]{1,3})?(e-?[0-9])?`).Draw(t, "number")

@@ -6,6 +6,8 @@ import (
 
 	"gonum.org/v1/gonum/mat"
 	"pgregory.net/rapid"
+
+	"kilovet/hv/chance"
 )
 
 // solved is a network of conductances given as triples, solved by the mesh.
@@ -26,7 +28,7 @@ func solved(nodes int, pairs [][2]int, g, current []float64) []float64 {
 
 // The mesh and a dense elimination of the nodal matrix give the same potentials.
 func TestMeshAgreesWithDenseElimination(t *testing.T) {
-	rapid.Check(t, func(r *rapid.T) {
+	chance.Check(t, func(r *rapid.T) {
 		nodes := rapid.IntRange(2, 12).Draw(r, "nodes")
 		var pairs [][2]int
 		for i := 1; i < nodes; i++ {

@@ -8,6 +8,7 @@ import (
 	"pgregory.net/rapid"
 
 	"kilovet/hv/chain"
+	"kilovet/hv/chance"
 	"kilovet/hv/circuit"
 	"kilovet/hv/quantity"
 )
@@ -50,7 +51,7 @@ func randomStores(r *rapid.T) (*circuit.Circuit, Voltages) {
 // A net left to itself loses energy or keeps it, comes to rest, and at rest no diode
 // has forward voltage and no resistor any.
 func TestRundownComesToRest(t *testing.T) {
-	rapid.Check(t, func(r *rapid.T) {
+	chance.Check(t, func(r *rapid.T) {
 		c, from := randomStores(r)
 		d := must(Discharge(c, from, volts60))
 		before := float64(must(Energy(c, from)))
@@ -72,7 +73,7 @@ func TestRundownComesToRest(t *testing.T) {
 
 // A short never delivers more energy than is stored, and what it leaves is at rest.
 func TestShortDeliversWhatIsThere(t *testing.T) {
-	rapid.Check(t, func(r *rapid.T) {
+	chance.Check(t, func(r *rapid.T) {
 		c, from := randomStores(r)
 		stored := float64(must(Energy(c, from)))
 		for n := 1; n < c.Nodes(); n++ {

@@ -8,6 +8,7 @@ import (
 	"pgregory.net/rapid"
 
 	"kilovet/hv/chain"
+	"kilovet/hv/chance"
 	"kilovet/hv/circuit"
 	"kilovet/hv/lack"
 	"kilovet/hv/quantity"
@@ -47,7 +48,7 @@ func randomNet(r *rapid.T) *chain.Chain {
 
 // At every node but ground and the one held the currents sum to nothing.
 func TestKirchhoff(t *testing.T) {
-	rapid.Check(t, func(r *rapid.T) {
+	chance.Check(t, func(r *rapid.T) {
 		c := build(randomNet(r))
 		s := must(Held(c, Fixed{"output", 20e3}))
 		held, _ := c.Node("output")
@@ -77,7 +78,7 @@ func TestKirchhoff(t *testing.T) {
 
 // What the held node delivers is what resistors and sinks take.
 func TestPowerBalance(t *testing.T) {
-	rapid.Check(t, func(r *rapid.T) {
+	chance.Check(t, func(r *rapid.T) {
 		c := build(randomNet(r))
 		s := must(Held(c, Fixed{"output", 20e3}))
 		held, _ := c.Node("output")
@@ -118,7 +119,7 @@ func drawnAt(s *State, n circuit.Node) float64 {
 
 // The response to a held voltage and sinks is the sum of the responses to each alone.
 func TestSuperposition(t *testing.T) {
-	rapid.Check(t, func(r *rapid.T) {
+	chance.Check(t, func(r *rapid.T) {
 		c := randomNet(r)
 		quiet := *c
 		quiet.Loads = nil

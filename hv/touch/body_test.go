@@ -7,6 +7,7 @@ import (
 
 	"pgregory.net/rapid"
 
+	"kilovet/hv/chance"
 	"kilovet/hv/quantity"
 	"kilovet/hv/touch"
 )
@@ -32,7 +33,7 @@ func TestShockAsPrinted(t *testing.T) {
 // The rms over 3RC gives the whole square time, which in the body's resistance is the
 // whole energy.
 func TestShockKeepsItsEnergy(t *testing.T) {
-	rapid.Check(t, func(t *rapid.T) {
+	chance.Check(t, func(t *rapid.T) {
 		c := quantity.Capacitance(math.Pow(10, rapid.Float64Range(-12, -5).Draw(t, "log capacitance")))
 		u := quantity.Voltage(math.Pow(10, rapid.Float64Range(0, 5).Draw(t, "log voltage")))
 		r := touch.Bodies()[rapid.IntRange(0, 2).Draw(t, "body")].Resistance

@@ -7,6 +7,7 @@ import (
 
 	"pgregory.net/rapid"
 
+	"kilovet/hv/chance"
 	"kilovet/hv/quantity"
 	"kilovet/hv/touch"
 )
@@ -114,7 +115,7 @@ func TestMeshDistance(t *testing.T) {
 // More voltage never asks for less distance, nor allows more capacitance but for the step
 // at 15 kV; a larger opening never for less.
 func TestTablesAreMonotone(t *testing.T) {
-	rapid.Check(t, func(t *rapid.T) {
+	chance.Check(t, func(t *rapid.T) {
 		u := quantity.Voltage(rapid.Float64Range(1, 99e3).Draw(t, "voltage"))
 		more := u + quantity.Voltage(rapid.Float64Range(1, 500e3).Draw(t, "more"))
 		a, err := touch.Approach(u)

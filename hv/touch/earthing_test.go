@@ -7,6 +7,7 @@ import (
 
 	"pgregory.net/rapid"
 
+	"kilovet/hv/chance"
 	"kilovet/hv/quantity"
 	"kilovet/hv/touch"
 )
@@ -63,7 +64,7 @@ func TestOpenBleederNeverDischarges(t *testing.T) {
 }
 
 func TestDischargeRoundTrips(t *testing.T) {
-	rapid.Check(t, func(t *rapid.T) {
+	chance.Check(t, func(t *rapid.T) {
 		c := quantity.Capacitance(math.Pow(10, rapid.Float64Range(-12, -5).Draw(t, "log capacitance")))
 		u := quantity.Voltage(rapid.Float64Range(61, 1e5).Draw(t, "voltage"))
 		within := quantity.Time(math.Pow(10, rapid.Float64Range(-3, 3).Draw(t, "log time")))

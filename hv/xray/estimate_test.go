@@ -7,6 +7,7 @@ import (
 
 	"pgregory.net/rapid"
 
+	"kilovet/hv/chance"
 	"kilovet/hv/lack"
 	"kilovet/hv/quantity"
 	"kilovet/hv/xray"
@@ -115,7 +116,7 @@ func drawn(t *rapid.T) (xray.Stop, xray.Wall) {
 // More voltage, more rate; a further layer, less; four times nearer, sixteen times;
 // proportional to the current; order and cutting of layers change nothing.
 func TestRatesFollow(t *testing.T) {
-	rapid.Check(t, func(t *rapid.T) {
+	chance.Check(t, func(t *rapid.T) {
 		s, w := drawn(t)
 		e := behind(t, s, w)
 		if e.Rate < 1e-250 {

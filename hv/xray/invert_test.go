@@ -7,6 +7,7 @@ import (
 
 	"pgregory.net/rapid"
 
+	"kilovet/hv/chance"
 	"kilovet/hv/lack"
 	"kilovet/hv/quantity"
 	"kilovet/hv/xray"
@@ -62,7 +63,7 @@ func TestInversionsFailClosed(t *testing.T) {
 
 // What the inversions and half-value layers find, the estimate confirms.
 func TestInversionsRoundTrip(t *testing.T) {
-	rapid.Check(t, func(t *rapid.T) {
+	chance.Check(t, func(t *rapid.T) {
 		s, w := drawn(t)
 		e := behind(t, s, w)
 		if e.Rate < 1e-250 {

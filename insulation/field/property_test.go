@@ -7,6 +7,7 @@ import (
 
 	"pgregory.net/rapid"
 
+	"kilovet/hv/chance"
 	"kilovet/hv/profile"
 	"kilovet/hv/quantity"
 )
@@ -21,7 +22,7 @@ func ballAt(t testing.TB, name string, radius, z float64) Electrode {
 // The peak between two balls at opposite potentials falls as the gap grows, is
 // never below the mean field, and never below that of the smaller ball alone.
 func TestPeakFallsWithTheGap(t *testing.T) {
-	rapid.Check(t, func(rt *rapid.T) {
+	chance.Check(t, func(rt *rapid.T) {
 		a := rapid.Float64Range(1, 20).Draw(rt, "one radius")
 		b := rapid.Float64Range(1, 20).Draw(rt, "other radius")
 		gap := rapid.Float64Range(0.02, 3).Draw(rt, "gap") * math.Min(a, b)

@@ -6,6 +6,7 @@ import (
 
 	"pgregory.net/rapid"
 
+	"kilovet/hv/chance"
 	"kilovet/hv/lack"
 	"kilovet/hv/quantity"
 	"kilovet/insulation/gap"
@@ -17,7 +18,7 @@ import (
 // voltage or a lack.
 func TestOnsetOfAnyComputedLine(t *testing.T) {
 	air := gas.State{Gas: gap.AirGas, Pressure: 101325, Temperature: 293.15}
-	rapid.Check(t, func(rt *rapid.T) {
+	chance.Check(t, func(rt *rapid.T) {
 		var list []shape.Sample
 		x := 0.0
 		for range rapid.IntRange(3, 40).Draw(rt, "places") {

@@ -4,6 +4,7 @@ import (
 	"math"
 	"testing"
 
+	"kilovet/hv/chance"
 	"kilovet/hv/lack"
 	"kilovet/hv/quantity"
 	"kilovet/insulation/gap"
@@ -117,7 +118,7 @@ func TestOnsetRefusesWhatItDoesNotKnow(t *testing.T) {
 // Density and length enter together: twice the density at half the size is the same
 // discharge at the same voltage.
 func TestSimilarity(t *testing.T) {
-	rapid.Check(t, func(rt *rapid.T) {
+	chance.Check(t, func(rt *rapid.T) {
 		k := rapid.SampledFrom([]gap.Kind{gap.Coaxial, gap.SpherePlane, gap.PointPlane, gap.ParallelCylinders, gap.SphereSphere}).Draw(rt, "kind")
 		r := quantity.Length(math.Pow(10, rapid.Float64Range(-4, -1.5).Draw(rt, "log r")))
 		d := quantity.Length(math.Pow(10, rapid.Float64Range(-3.5, -1).Draw(rt, "log d")))
@@ -134,7 +135,7 @@ func TestSimilarity(t *testing.T) {
 // either kind are the hardest: a larger radius lets the far one count.
 func TestOnsetRises(t *testing.T) {
 	kinds := []gap.Kind{gap.Coaxial, gap.ConcentricSpheres, gap.SpherePlane, gap.SphereSphere, gap.CylinderPlane, gap.ParallelCylinders, gap.PointPlane}
-	rapid.Check(t, func(rt *rapid.T) {
+	chance.Check(t, func(rt *rapid.T) {
 		k := rapid.SampledFrom(kinds).Draw(rt, "kind")
 		d := quantity.Length(math.Pow(10, rapid.Float64Range(-3.5, -0.7).Draw(rt, "log d")))
 		r := d * quantity.Length(math.Pow(10, rapid.Float64Range(-2.5, 1.5).Draw(rt, "log r/d")))

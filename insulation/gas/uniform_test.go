@@ -5,6 +5,7 @@ import (
 	"math"
 	"testing"
 
+	"kilovet/hv/chance"
 	"kilovet/hv/lack"
 	"kilovet/hv/quantity"
 	"kilovet/insulation/gap"
@@ -80,7 +81,7 @@ func TestPaschenMeetsTheUniformLawAtATenthOfAMillimetre(t *testing.T) {
 
 // More gap never breaks down lower, right of the minimum, through all laws of air.
 func TestUniformAirRises(t *testing.T) {
-	rapid.Check(t, func(rt *rapid.T) {
+	chance.Check(t, func(rt *rapid.T) {
 		p := math.Pow(10, rapid.Float64Range(1, 6).Draw(rt, "log p"))
 		x := math.Pow(10, rapid.Float64Range(-6, -0.75).Draw(rt, "log δd")) // 1 µm to 18 cm
 		d := x * 101325 / p

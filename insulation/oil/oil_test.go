@@ -5,6 +5,7 @@ import (
 	"math"
 	"testing"
 
+	"kilovet/hv/chance"
 	"kilovet/hv/lack"
 	"kilovet/hv/quantity"
 	"kilovet/insulation/gap"
@@ -138,7 +139,7 @@ func TestBreakdownOfShapesIsThatOfTheirPeakField(t *testing.T) {
 }
 
 func TestInversionsComeBack(t *testing.T) {
-	rapid.Check(t, func(t *rapid.T) {
+	chance.Check(t, func(t *rapid.T) {
 		d := quantity.Length(rapid.Float64Range(4*mm, 12*mm).Draw(t, "d"))
 		r := quantity.Length(rapid.Float64Range(0.5*mm, 30*mm).Draw(t, "r"))
 		clean, err := oil.CleanBreakdown(d)

@@ -6,6 +6,7 @@ import (
 
 	"pgregory.net/rapid"
 
+	"kilovet/hv/chance"
 	"kilovet/hv/lack"
 	"kilovet/hv/quantity"
 	"kilovet/insulation/gap"
@@ -55,7 +56,7 @@ func TestSampledIsTheLineItWasTakenFrom(t *testing.T) {
 
 // A bump farther on raises what lies before it, and no line falls below its samples.
 func TestSampledIsAnUpperBound(t *testing.T) {
-	rapid.Check(t, func(rt *rapid.T) {
+	chance.Check(t, func(rt *rapid.T) {
 		var list []shape.Sample
 		x := 0.0
 		for range rapid.IntRange(3, 30).Draw(rt, "places") {

@@ -5,6 +5,7 @@ import (
 	"math"
 	"testing"
 
+	"kilovet/hv/chance"
 	"kilovet/hv/lack"
 	"kilovet/hv/quantity"
 	"kilovet/insulation/gap"
@@ -143,7 +144,7 @@ func TestPrintedSphereFieldIsOffByItsConstant(t *testing.T) {
 
 // The field along the line adds up to the voltage.
 func TestTheLineCarriesTheWholeVoltage(t *testing.T) {
-	rapid.Check(t, func(rt *rapid.T) {
+	chance.Check(t, func(rt *rapid.T) {
 		a := rapid.SampledFrom(all).Draw(rt, "arrangement")
 		d := math.Pow(10, rapid.Float64Range(-4, -1).Draw(rt, "log gap"))
 		ratio := math.Pow(10, rapid.Float64Range(-2, 3).Draw(rt, "log gap/radius"))
@@ -240,7 +241,7 @@ func TestBestInnerRadiusInAFixedOuterOne(t *testing.T) {
 
 // At a fixed gap a larger radius lowers the peak; at a fixed radius so does a larger gap.
 func TestRounderAndWiderIsMilder(t *testing.T) {
-	rapid.Check(t, func(rt *rapid.T) {
+	chance.Check(t, func(rt *rapid.T) {
 		a := rapid.SampledFrom(all[1:]).Draw(rt, "arrangement")
 		d := math.Pow(10, rapid.Float64Range(-4, 0).Draw(rt, "log gap"))
 		r := d / math.Pow(10, rapid.Float64Range(-2, 3).Draw(rt, "log gap/radius"))

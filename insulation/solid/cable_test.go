@@ -5,6 +5,7 @@ import (
 	"math"
 	"testing"
 
+	"kilovet/hv/chance"
 	"kilovet/hv/lack"
 	"kilovet/hv/quantity"
 	"kilovet/insulation/gap"
@@ -44,7 +45,7 @@ func ExampleWall_Fields() {
 
 // One layer is the coaxial field that shapes know.
 func TestSingleLayerIsTheCoaxialShape(t *testing.T) {
-	rapid.Check(t, func(t *rapid.T) {
+	chance.Check(t, func(t *rapid.T) {
 		r := quantity.Length(rapid.Float64Range(0.1*mm, 50*mm).Draw(t, "r"))
 		d := quantity.Length(rapid.Float64Range(0.1*mm, 50*mm).Draw(t, "d"))
 		l, err := shape.Of(gap.Shape{Kind: gap.Coaxial, InnerRadius: r, OuterRadius: r + d}, 0)

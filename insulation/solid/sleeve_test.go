@@ -4,6 +4,7 @@ import (
 	"math"
 	"testing"
 
+	"kilovet/hv/chance"
 	"kilovet/hv/lack"
 	"kilovet/hv/quantity"
 	"kilovet/insulation/gap"
@@ -38,7 +39,7 @@ func TestAnnulusTakesMostOfTheVoltage(t *testing.T) {
 // The field at the conductor rises with the permittivity of the sleeve: the better the
 // ceramic, the worse the annulus. Without a difference the sleeve is air.
 func TestBetterSleevesStressTheAnnulusMore(t *testing.T) {
-	rapid.Check(t, func(t *rapid.T) {
+	chance.Check(t, func(t *rapid.T) {
 		s := sleeve
 		s.Permittivity = rapid.Float64Range(1, 10).Draw(t, "permittivity")
 		more := s
@@ -131,7 +132,7 @@ func TestTwoAnnuliShareWhatTheSleeveGivesUp(t *testing.T) {
 		t.Fatal(inner, wall, outer, err)
 	}
 	near(t, "ratio", float64(inner/outer), math.Log(4.0/3)/math.Log(14.0/12), 1e-12)
-	rapid.Check(t, func(t *rapid.T) {
+	chance.Check(t, func(t *rapid.T) {
 		s.Permittivity = rapid.Float64Range(1, 100).Draw(t, "permittivity")
 		a, w, b, err := s.Shares(solid.Switched)
 		if err != nil || !quantity.Equal(a+w+b, 1) || a >= inner || b >= outer {

@@ -5,6 +5,7 @@ import (
 	"math"
 	"testing"
 
+	"kilovet/hv/chance"
 	"kilovet/hv/lack"
 	"kilovet/hv/quantity"
 	"kilovet/insulation/gap"
@@ -207,7 +208,7 @@ func TestBreakdownOfASheetIsStrengthTimesThickness(t *testing.T) {
 // Round a thin conductor thickness ends to help: the strength falls faster than the field.
 // A thicker wall never stands less, and never more than in proportion.
 func TestThickerWallsNeverStandLess(t *testing.T) {
-	rapid.Check(t, func(t *rapid.T) {
+	chance.Check(t, func(t *rapid.T) {
 		r := quantity.Length(math.Exp(rapid.Float64Range(math.Log(0.05*mm), math.Log(30*mm)).Draw(t, "log r")))
 		d := quantity.Length(math.Exp(rapid.Float64Range(math.Log(0.05*mm), math.Log(40*mm)).Draw(t, "log d")))
 		for _, k := range []gap.Kind{gap.Plates, gap.Coaxial, gap.ConcentricSpheres, gap.CylinderPlane, gap.SpherePlane} {
@@ -228,7 +229,7 @@ func TestThickerWallsNeverStandLess(t *testing.T) {
 }
 
 func TestThicknessForBreakdownInvertsBreakdown(t *testing.T) {
-	rapid.Check(t, func(t *rapid.T) {
+	chance.Check(t, func(t *rapid.T) {
 		d := quantity.Length(math.Exp(rapid.Float64Range(math.Log(0.02*mm), math.Log(50*mm)).Draw(t, "log d")))
 		name := rapid.SampledFrom([]string{"alumina", "epoxy", "PTFE", "FR-4"}).Draw(t, "material")
 		for what, g := range map[string]gap.Gap{"sheet": sheet(name, d), "tube": tube(name, 100*mm, d)} {

@@ -4,6 +4,7 @@ import (
 	"math"
 	"testing"
 
+	"kilovet/hv/chance"
 	"kilovet/hv/lack"
 	"kilovet/hv/quantity"
 	"kilovet/insulation/solid"
@@ -26,7 +27,7 @@ func walls(t *rapid.T) solid.Wall {
 
 // The layers take the whole voltage, and flux (or current) passes their faces.
 func TestLayersShareTheVoltageAndPassFluxOrCurrent(t *testing.T) {
-	rapid.Check(t, func(t *rapid.T) {
+	chance.Check(t, func(t *rapid.T) {
 		w := walls(t)
 		for _, how := range []solid.Sharing{solid.Switched, solid.Settled} {
 			v, err := w.Voltages(10*kV, how)
@@ -125,7 +126,7 @@ func TestSettlingAgainstTheLayersStepByStep(t *testing.T) {
 }
 
 func TestWithstandIsWhereTheFirstLayerReachesItsLimit(t *testing.T) {
-	rapid.Check(t, func(t *rapid.T) {
+	chance.Check(t, func(t *rapid.T) {
 		w := walls(t)
 		limits := make([]quantity.Field, len(w.Layers))
 		for i := range limits {

@@ -6,6 +6,7 @@ import (
 	"strings"
 	"testing"
 
+	"kilovet/hv/chance"
 	"kilovet/hv/lack"
 	"kilovet/hv/quantity"
 	"kilovet/insulation/gap"
@@ -221,7 +222,7 @@ func TestCombinedClearanceMeetsItsEnds(t *testing.T) {
 }
 
 func TestReachUndoesAt(t *testing.T) {
-	rapid.Check(t, func(t *rapid.T) {
+	chance.Check(t, func(t *rapid.T) {
 		c := table.SteadyClearance(table.Case(rapid.IntRange(0, 1).Draw(t, "case")))
 		u := quantity.Voltage(rapid.Float64Range(330, float64(c.Last())).Draw(t, "peak"))
 		r, err := c.At(u)
@@ -247,7 +248,7 @@ func TestReachEndsWithTheTable(t *testing.T) {
 
 // A dirtier place, a worse material, a higher voltage or a higher place never needs less.
 func TestNothingWorseNeedsLess(t *testing.T) {
-	rapid.Check(t, func(t *rapid.T) {
+	chance.Check(t, func(t *rapid.T) {
 		v := quantity.Voltage(rapid.Float64Range(1, 60e3).Draw(t, "V"))
 		more := v * quantity.Voltage(rapid.Float64Range(1, 1.05).Draw(t, "more"))
 		degree := rapid.IntRange(1, 2).Draw(t, "degree")

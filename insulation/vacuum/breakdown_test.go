@@ -5,6 +5,7 @@ import (
 	"math"
 	"testing"
 
+	"kilovet/hv/chance"
 	"kilovet/hv/lack"
 	"kilovet/hv/quantity"
 	"kilovet/insulation/gap"
@@ -153,7 +154,7 @@ func TestPressureEndsTheVacuumLaws(t *testing.T) {
 }
 
 func TestClearanceForBreakdownInvertsBreakdown(t *testing.T) {
-	rapid.Check(t, func(t *rapid.T) {
+	chance.Check(t, func(t *rapid.T) {
 		d := quantity.Length(math.Exp(rapid.Float64Range(math.Log(0.1*mm), math.Log(300*mm)).Draw(t, "log d")))
 		all := shapes(d)
 		all[gap.Plates] = plates(d)

@@ -4,6 +4,7 @@ import (
 	"math"
 	"testing"
 
+	"kilovet/hv/chance"
 	"kilovet/hv/lack"
 	"kilovet/hv/quantity"
 	"kilovet/insulation/vacuum"
@@ -55,7 +56,7 @@ func TestEdgeExponentLimits(t *testing.T) {
 // The exponent satisfies the conditions at the surface between vacuum and insulator, and
 // no lesser one does: potential and flux pass.
 func TestEdgeExponentIsTheLeastThatPassesTheSurface(t *testing.T) {
-	rapid.Check(t, func(t *rapid.T) {
+	chance.Check(t, func(t *rapid.T) {
 		er := rapid.Float64Range(1.05, 100).Draw(t, "permittivity")
 		angle := rapid.Float64Range(2*degree, 178*degree).Draw(t, "angle")
 		a, err := vacuum.EdgeExponent(er, quantity.Angle(angle))

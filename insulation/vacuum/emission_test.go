@@ -4,6 +4,7 @@ import (
 	"math"
 	"testing"
 
+	"kilovet/hv/chance"
 	"kilovet/hv/lack"
 	"kilovet/hv/quantity"
 	"kilovet/insulation/vacuum"
@@ -63,7 +64,7 @@ func TestEmitterReachesANanoampereAtTheFieldsOfTheReview(t *testing.T) {
 }
 
 func TestFieldForInvertsCurrent(t *testing.T) {
-	rapid.Check(t, func(t *rapid.T) {
+	chance.Check(t, func(t *rapid.T) {
 		spot := vacuum.Emitter{
 			WorkFunction: quantity.ElectronEnergy(rapid.Float64Range(2.6, 5.5).Draw(t, "work function")),
 			Enhancement:  rapid.Float64Range(1, 900).Draw(t, "beta"),

@@ -5,6 +5,7 @@ import (
 	"math"
 	"testing"
 
+	"kilovet/hv/chance"
 	"kilovet/hv/lack"
 	"kilovet/hv/quantity"
 	"kilovet/insulation/gap"
@@ -29,7 +30,7 @@ func ExampleReference_At() {
 // Pillai and Hackam: V ~ √L. Four times the length doubles the voltage; a rating in kV/mm
 // of a short sample must not be multiplied.
 func TestFlashoverGrowsWithTheRootOfLength(t *testing.T) {
-	rapid.Check(t, func(t *rapid.T) {
+	chance.Check(t, func(t *rapid.T) {
 		l := quantity.Length(rapid.Float64Range(1*mm, 75*mm).Draw(t, "length"))
 		one, err := tested.At(l)
 		four, err2 := tested.At(4 * l)

@@ -6,6 +6,7 @@ import (
 	"strings"
 	"testing"
 
+	"kilovet/hv/chance"
 	"kilovet/hv/lack"
 	"kilovet/hv/quantity"
 	"kilovet/insulation/gap"
@@ -99,7 +100,7 @@ func TestLeftOfTheMinimumMoreDistanceBreaksDownLower(t *testing.T) {
 
 // The pressure allowed falls as the path grows, and a longer path is worse at any product.
 func TestPathsAndPressuresInvert(t *testing.T) {
-	rapid.Check(t, func(t *rapid.T) {
+	chance.Check(t, func(t *rapid.T) {
 		s := vacuum.Vessel{
 			LongestPath: quantity.Length(rapid.Float64Range(1*mm, 5).Draw(t, "path")),
 			GaugeFactor: rapid.Float64Range(0.2, 6).Draw(t, "gauge factor"),

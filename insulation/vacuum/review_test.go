@@ -4,6 +4,7 @@ import (
 	"math"
 	"testing"
 
+	"kilovet/hv/chance"
 	"kilovet/hv/lack"
 	"kilovet/hv/quantity"
 	"kilovet/insulation/gap"
@@ -62,7 +63,7 @@ func TestOnsetIsEmissionInShortAndBreakdownInLongGaps(t *testing.T) {
 }
 
 func TestOnsetNeverExceedsBreakdownAndInverts(t *testing.T) {
-	rapid.Check(t, func(t *rapid.T) {
+	chance.Check(t, func(t *rapid.T) {
 		d := quantity.Length(math.Exp(rapid.Float64Range(math.Log(0.1*mm), math.Log(300*mm)).Draw(t, "log d")))
 		for k, g := range shapes(d) {
 			onset, err := vacuum.Onset(g)
@@ -127,7 +128,7 @@ func TestLargerAreasStandLessField(t *testing.T) {
 }
 
 func TestAreaFactorsMultiply(t *testing.T) {
-	rapid.Check(t, func(t *rapid.T) {
+	chance.Check(t, func(t *rapid.T) {
 		draw := rapid.Float64Range(1, 9)
 		a, b := quantity.Area(draw.Draw(t, "a")), quantity.Area(draw.Draw(t, "b"))
 		one, _ := vacuum.AreaFactor(a, 1)

@@ -4,6 +4,7 @@ import (
 	"math"
 	"testing"
 
+	"kilovet/hv/chance"
 	"kilovet/hv/lack"
 	"kilovet/hv/quantity"
 	"kilovet/insulation/gap"
@@ -74,7 +75,7 @@ func TestALargerAreaStandsLess(t *testing.T) {
 	}
 	near(t, "ten times", float64(at(1e-3)/at(1e-4)), 0.5754, 1e-4)
 	near(t, "small", float64(at(1e-6)/at(1e-4)), 1, 1e-12)
-	rapid.Check(t, func(t *rapid.T) {
+	chance.Check(t, func(t *rapid.T) {
 		area := quantity.Area(math.Exp(rapid.Float64Range(math.Log(1.01e-4), math.Log(5e-3)).Draw(t, "log area")))
 		if at(1.5*area) >= at(area) {
 			t.Fatalf("%v stands no less than %v", 1.5*area, area)
@@ -92,7 +93,7 @@ func TestALargerAreaStandsLess(t *testing.T) {
 
 // Whatever the state, the inversions undo the laws.
 func TestInversionsHoldInEveryState(t *testing.T) {
-	rapid.Check(t, func(t *rapid.T) {
+	chance.Check(t, func(t *rapid.T) {
 		d := quantity.Length(math.Exp(rapid.Float64Range(math.Log(0.1*mm), math.Log(300*mm)).Draw(t, "log d")))
 		g := shapes(d)[rapid.SampledFrom([]gap.Kind{gap.Coaxial, gap.SpherePlane, gap.RoundedEdge}).Draw(t, "kind")]
 		g.Polished = rapid.SampledFrom([]*bool{nil, new(true), new(false)}).Draw(t, "polished")

@@ -11,6 +11,7 @@ import (
 	"github.com/google/go-cmp/cmp"
 	"pgregory.net/rapid"
 
+	"kilovet/hv/chance"
 	"kilovet/reports/digest"
 	"kilovet/reports/internal/sample"
 	"kilovet/rules"
@@ -51,7 +52,7 @@ func TestGravestConcernStandsFirstAgainstSwitchingOn(t *testing.T) {
 }
 
 func TestEntriesCountEveryFinding(t *testing.T) {
-	rapid.Check(t, func(t *rapid.T) {
+	chance.Check(t, func(t *rapid.T) {
 		var findings []rule.Finding
 		for range rapid.IntRange(0, 30).Draw(t, "n") {
 			findings = append(findings, rule.Finding{
@@ -106,7 +107,7 @@ func TestStatesComeInTheirUsualOrder(t *testing.T) {
 
 func TestNoFigureIsLost(t *testing.T) {
 	word := rapid.SampledFrom([]string{"", "working", "cold", "lost", "other"})
-	rapid.Check(t, func(t *rapid.T) {
+	chance.Check(t, func(t *rapid.T) {
 		var figures []figure.Figure
 		for range rapid.IntRange(0, 30).Draw(t, "n") {
 			figures = append(figures, figure.Figure{ID: word.Draw(t, "id"), Subject: word.Draw(t, "subject"), State: word.Draw(t, "state"), Value: 1, Unit: "V"})
@@ -295,7 +296,7 @@ func TestSentences(t *testing.T) {
 }
 
 func TestCleanTextCannotSteerATerminal(t *testing.T) {
-	rapid.Check(t, func(t *rapid.T) {
+	chance.Check(t, func(t *rapid.T) {
 		s := string(rapid.SliceOf(rapid.Byte()).Draw(t, "bytes")) + rapid.String().Draw(t, "text")
 		got := digest.Clean(s)
 		if !utf8.ValidString(got) || strings.ContainsFunc(got, func(r rune) bool { return unicode.In(r, unicode.Cc, unicode.Cf, unicode.Zl, unicode.Zp) }) {

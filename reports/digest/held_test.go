@@ -7,6 +7,7 @@ import (
 
 	"pgregory.net/rapid"
 
+	"kilovet/hv/chance"
 	"kilovet/reports/digest"
 )
 
@@ -31,7 +32,7 @@ func TestANumberKeepsItsUnit(t *testing.T) {
 // Both ways of taking a text apart agree.
 func TestPartsAsHeld(t *testing.T) {
 	word := rapid.SampledFrom([]string{"3", "-4.5e-6", "(2", "kV", "mbar,", "Pa", "m", "F.8", "%", "x"})
-	rapid.Check(t, func(t *rapid.T) {
+	chance.Check(t, func(t *rapid.T) {
 		s := strings.Join(rapid.SliceOfN(word, 1, 8).Draw(t, "words"), " ")
 		want := digest.Held(s)
 		var got []string

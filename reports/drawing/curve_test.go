@@ -12,6 +12,7 @@ import (
 	"gonum.org/v1/plot/vg/recorder"
 	"pgregory.net/rapid"
 
+	"kilovet/hv/chance"
 	"kilovet/hv/quantity"
 	"kilovet/reports/digest"
 	"kilovet/reports/internal/sample"
@@ -143,7 +144,7 @@ func TestTicks(t *testing.T) {
 // Of any values, the axis holds all, and its ticks lie on it, in order, at most one
 // more than twice what was asked.
 func TestTicksOfAnyValues(t *testing.T) {
-	rapid.Check(t, func(t *rapid.T) {
+	chance.Check(t, func(t *rapid.T) {
 		from := rapid.Float64Range(-1e6, 1e6).Draw(t, "from")
 		to := from + rapid.Float64Range(0, 1e6).Draw(t, "span")
 		parts := rapid.IntRange(1, 12).Draw(t, "parts")

@@ -7,6 +7,7 @@ import (
 
 	"pgregory.net/rapid"
 
+	"kilovet/hv/chance"
 	"kilovet/rules/exhibit"
 )
 
@@ -44,7 +45,7 @@ func TestHatchingByShare(t *testing.T) {
 // Hatching stays in its boxes, and what many boxes bear is what the one that they make up
 // does.
 func TestHatchingKeepsToItsBoxes(t *testing.T) {
-	rapid.Check(t, func(rt *rapid.T) {
+	chance.Check(t, func(rt *rapid.T) {
 		pitch, rise := rapid.Float64Range(0.4, 5).Draw(rt, "pitch"), rapid.SampledFrom([]float64{1, -1}).Draw(rt, "rise")
 		left, low := rapid.Float64Range(-50, 50).Draw(rt, "left"), rapid.Float64Range(-50, 50).Draw(rt, "low")
 		size := rapid.Float64Range(0.5, 40).Draw(rt, "size")

@@ -8,6 +8,7 @@ import (
 	"pgregory.net/rapid"
 
 	"kilovet/hv/chain"
+	"kilovet/hv/chance"
 	"kilovet/rules/diagram"
 	"kilovet/rules/evidence"
 )
@@ -49,7 +50,7 @@ func anyChain(t *rapid.T) string {
 // Whatever the chain, every part is drawn, no text covers another and no wire crosses
 // one.
 func TestAnyChainIsDrawn(t *testing.T) {
-	rapid.Check(t, func(t *rapid.T) {
+	chance.Check(t, func(t *rapid.T) {
 		text := anyChain(t)
 		c, faults := chain.Read([]byte(text))
 		if len(faults) > 0 {

@@ -12,6 +12,7 @@ import (
 	"github.com/google/go-cmp/cmp"
 	"pgregory.net/rapid"
 
+	"kilovet/hv/chance"
 	"kilovet/reports/internal/sample"
 	kilojson "kilovet/reports/json"
 	"kilovet/rules"
@@ -88,7 +89,7 @@ func TestRuleOfPresenceHasNoAmounts(t *testing.T) {
 }
 
 func TestValuesReadBackExactly(t *testing.T) {
-	rapid.Check(t, func(t *rapid.T) {
+	chance.Check(t, func(t *rapid.T) {
 		v := rapid.Float64().Filter(func(v float64) bool { return !math.IsInf(v, 0) && !math.IsNaN(v) }).Draw(t, "value")
 		out, err := kilojson.Render(&rules.Review{Figures: []figure.Figure{{Value: v}}})
 		if err != nil {

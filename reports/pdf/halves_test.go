@@ -8,6 +8,7 @@ import (
 
 	"pgregory.net/rapid"
 
+	"kilovet/hv/chance"
 	"kilovet/reports/page"
 )
 
@@ -15,7 +16,7 @@ import (
 // none is lost.
 func TestColumnsHoldPiecesOfAnyHeight(t *testing.T) {
 	f := testFonts(t)
-	rapid.Check(t, func(t *rapid.T) {
+	chance.Check(t, func(t *rapid.T) {
 		var halves page.Halves
 		n := 0
 		for range rapid.IntRange(1, 5).Draw(t, "tables") {

@@ -15,6 +15,7 @@ import (
 
 	"pgregory.net/rapid"
 
+	"kilovet/hv/chance"
 	"kilovet/reports/drawing"
 	"kilovet/reports/internal/sample"
 	"kilovet/reports/page"
@@ -122,7 +123,7 @@ func TestBodyStaysClearOfTheTitleBlock(t *testing.T) {
 
 func TestTablesOfAnyHeightStayInTheBody(t *testing.T) {
 	f := testFonts(t)
-	rapid.Check(t, func(t *rapid.T) {
+	chance.Check(t, func(t *rapid.T) {
 		table := page.Table{Columns: []page.Column{{Title: "one", Share: 0.3}, {Title: "two", Share: 0.7, Right: true}}}
 		tall := func(label string) []page.Line {
 			return slices.Repeat([]page.Line{{Text: "line"}}, rapid.IntRange(0, 120).Draw(t, label))
@@ -338,7 +339,7 @@ func TestGuard(t *testing.T) {
 
 func TestWrappedLinesFitAndKeepTheText(t *testing.T) {
 	f := testFonts(t)
-	rapid.Check(t, func(t *rapid.T) {
+	chance.Check(t, func(t *rapid.T) {
 		s := rapid.StringOf(rapid.RuneFrom([]rune("ab iW._-/高"))).Draw(t, "text")
 		width := rapid.Float64Range(4, 60).Draw(t, "width")
 		var all strings.Builder

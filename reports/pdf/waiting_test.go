@@ -8,6 +8,7 @@ import (
 
 	"pgregory.net/rapid"
 
+	"kilovet/hv/chance"
 	"kilovet/reports/internal/sample"
 	"kilovet/reports/page"
 )
@@ -17,7 +18,7 @@ import (
 func TestFiguresThatWaitStandClear(t *testing.T) {
 	f := testFonts(t)
 	curves := sample.Curves()
-	rapid.Check(t, func(t *rapid.T) {
+	chance.Check(t, func(t *rapid.T) {
 		var gallery page.Gallery
 		for i := range rapid.IntRange(1, 5).Draw(t, "figures") {
 			curve := curves[rapid.IntRange(0, 2).Draw(t, "curve")]

@@ -7,6 +7,7 @@ import (
 
 	"pgregory.net/rapid"
 
+	"kilovet/hv/chance"
 	"kilovet/hv/quantity"
 )
 
@@ -150,7 +151,7 @@ func TestTwoSquares(t *testing.T) {
 // The whole disturbance scaled up over a source never gives a smaller disc, nor one
 // larger than both discs added in squares.
 func TestRippleOnlyWidens(t *testing.T) {
-	rapid.Check(t, func(t *rapid.T) {
+	chance.Check(t, func(t *rapid.T) {
 		source := []Distribution{gaussian(t, 1), thermal(t)}[rapid.IntRange(0, 1).Draw(t, "source")]
 		ripple := Convolve(anyLines(t)...)
 		factor := rapid.Float64Range(1.01, 3).Draw(t, "factor")

@@ -7,6 +7,7 @@ import (
 
 	"pgregory.net/rapid"
 
+	"kilovet/hv/chance"
 	"kilovet/hv/lack"
 	"kilovet/hv/quantity"
 )
@@ -145,7 +146,7 @@ func TestSampledForms(t *testing.T) {
 
 // Any closed polygon: rising to one, centred, and as wide as its samples say.
 func TestAnySampledForm(t *testing.T) {
-	rapid.Check(t, func(t *rapid.T) {
+	chance.Check(t, func(t *rapid.T) {
 		samples := make([]quantity.Voltage, rapid.IntRange(2, 40).Draw(t, "samples"))
 		for i := range samples {
 			samples[i] = quantity.Voltage(rapid.IntRange(-5, 5).Draw(t, fmt.Sprint(i)))
@@ -207,7 +208,7 @@ func TestSampledFailsClosed(t *testing.T) {
 // Energies that are independent: variances add, whatever the forms, and widths
 // scale with the whole.
 func TestVariancesAdd(t *testing.T) {
-	rapid.Check(t, func(t *rapid.T) {
+	chance.Check(t, func(t *rapid.T) {
 		parts := anyParts(t)
 		sum := 0.0
 		for _, d := range parts {

@@ -7,6 +7,7 @@ import (
 
 	"pgregory.net/rapid"
 
+	"kilovet/hv/chance"
 	"kilovet/hv/lack"
 	"kilovet/hv/quantity"
 )
@@ -72,7 +73,7 @@ func TestShares(t *testing.T) {
 
 // Put back into the spot, the ripple allowed gives the allowance to 1e-6.
 func TestRippleAllowedMeetsTheAllowance(t *testing.T) {
-	rapid.Check(t, func(t *rapid.T) {
+	chance.Check(t, func(t *rapid.T) {
 		e := at(t, rapid.Float64Range(0.5, 300).Draw(t, "kV"))
 		o := Optics{Chromatic: 9e-3, Spherical: 25e-3, Angle: quantity.Angle(rapid.Float64Range(1e-3, 20e-3).Draw(t, "angle")), SourceImage: 1e-9}
 		source := []Distribution{{}, gaussian(t, 0.6), thermal(t).Scaled(0.23)}[rapid.IntRange(0, 2).Draw(t, "source")]

@@ -7,6 +7,7 @@ import (
 
 	"pgregory.net/rapid"
 
+	"kilovet/hv/chance"
 	"kilovet/hv/quantity"
 )
 
@@ -73,7 +74,7 @@ func TestEqualCapacitorsGiveThePolynomials(t *testing.T) {
 // Unequal capacitors, half-wave and symmetrical: the sums over the stages written
 // out (derived by charge balance).
 func TestUnequalCapacitorsGiveTheSums(t *testing.T) {
-	rapid.Check(t, func(t *rapid.T) {
+	chance.Check(t, func(t *rapid.T) {
 		c := anyCascade(t)
 		c.Square = false
 		s := c.climb(1)
@@ -192,7 +193,7 @@ func TestTextbookDropIsNeitherMaximumNorMean(t *testing.T) {
 
 // Everything the load does is proportional to I/(f C).
 func TestScalesWithTheLoadOverFrequencyAndCapacitance(t *testing.T) {
-	rapid.Check(t, func(t *rapid.T) {
+	chance.Check(t, func(t *rapid.T) {
 		c := anyCascade(t)
 		load := anyLoad(t, c)
 		base := c.climb(load)
@@ -224,7 +225,7 @@ func same(t *rapid.T, got, want, scale quantity.Voltage) {
 }
 
 func TestWithoutLoad(t *testing.T) {
-	rapid.Check(t, func(t *rapid.T) {
+	chance.Check(t, func(t *rapid.T) {
 		c := anyCascade(t)
 		s, err := c.Loaded(0)
 		if err != nil {

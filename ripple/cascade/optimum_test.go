@@ -5,12 +5,13 @@ import (
 
 	"pgregory.net/rapid"
 
+	"kilovet/hv/chance"
 	"kilovet/hv/quantity"
 )
 
 // No other number of stages gives more, whichever the kind.
 func TestNoOtherNumberOfStagesGivesMore(t *testing.T) {
-	rapid.Check(t, func(t *rapid.T) {
+	chance.Check(t, func(t *rapid.T) {
 		kind := rapid.SampledFrom(kinds).Draw(t, "kind")
 		c := Cascade{Symmetrical: kind.symmetrical, Square: kind.square, Peak: 1000, Frequency: 1000, ForwardDrop: 3}.WithEqual(1, 1e-9)
 		load := quantity.Current(rapid.Float64Range(1e-6, 2.9e-4).Draw(t, "load"))

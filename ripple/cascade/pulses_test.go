@@ -6,6 +6,7 @@ import (
 
 	"pgregory.net/rapid"
 
+	"kilovet/hv/chance"
 	"kilovet/hv/quantity"
 )
 
@@ -52,7 +53,7 @@ func sumOfElastance(c Cascade) float64 {
 
 // Closed forms against pulses, any capacitors: every level of the output wave-form.
 func TestClosedFormsAgainstPulses(t *testing.T) {
-	rapid.Check(t, func(t *rapid.T) {
+	chance.Check(t, func(t *rapid.T) {
 		c := anyCascade(t)
 		c.Symmetrical = false
 		n := min(c.Stages(), 5)

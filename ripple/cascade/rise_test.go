@@ -6,6 +6,7 @@ import (
 
 	"pgregory.net/rapid"
 
+	"kilovet/hv/chance"
 	"kilovet/hv/lack"
 	"kilovet/hv/quantity"
 )
@@ -76,7 +77,7 @@ func TestRiseAgainstLaddersSolvedInTime(t *testing.T) {
 // Whatever the capacitors, the cascade ends at its no-load voltage and on the way
 // up neither falls nor exceeds it.
 func TestRisesToTheNoLoadVoltage(t *testing.T) {
-	rapid.Check(t, func(t *rapid.T) {
+	chance.Check(t, func(t *rapid.T) {
 		c := anyCascade(t)
 		l, before := c.discharged(), quantity.Voltage(0)
 		noLoad, _ := c.NoLoad()

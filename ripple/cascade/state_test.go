@@ -5,12 +5,13 @@ import (
 
 	"pgregory.net/rapid"
 
+	"kilovet/hv/chance"
 	"kilovet/hv/quantity"
 )
 
 // What is said of nodes, capacitors and output must be one state.
 func TestNodesAreSumsOfCapacitors(t *testing.T) {
-	rapid.Check(t, func(t *rapid.T) {
+	chance.Check(t, func(t *rapid.T) {
 		c := anyCascade(t)
 		s := c.climb(anyLoad(t, c))
 		var smoothing, coupling quantity.Voltage
@@ -55,7 +56,7 @@ func TestColumnIsTheSumOfCouplingSwings(t *testing.T) {
 // Upper capacitors of a loaded cascade carry less than lower ones, never more than
 // twice the peak; no diode is reversed by more than that either.
 func TestStressFallsUpwards(t *testing.T) {
-	rapid.Check(t, func(t *rapid.T) {
+	chance.Check(t, func(t *rapid.T) {
 		c := anyCascade(t)
 		s := c.climb(anyLoad(t, c))
 		for k := range s.Smoothing {

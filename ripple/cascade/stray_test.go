@@ -6,6 +6,7 @@ import (
 
 	"pgregory.net/rapid"
 
+	"kilovet/hv/chance"
 	"kilovet/hv/lack"
 	"kilovet/hv/quantity"
 )
@@ -38,7 +39,7 @@ func TestEfficiencyForms(t *testing.T) {
 
 // The network of capacitors, solved row by row, is the closed discrete form.
 func TestNetworkOfStraysIsTheDiscreteForm(t *testing.T) {
-	rapid.Check(t, func(t *rapid.T) {
+	chance.Check(t, func(t *rapid.T) {
 		n := rapid.IntRange(1, 60).Draw(t, "stages")
 		ratio := math.Exp(rapid.Float64Range(-12, 1).Draw(t, "logarithm of the ratio"))
 		c := Cascade{Peak: 1000, Frequency: 3e4, Junction: quantity.Capacitance(ratio * 1e-9)}.WithEqual(n, 1e-9)
@@ -80,7 +81,7 @@ func TestContinuousFormIsOptimistic(t *testing.T) {
 }
 
 func TestStraysOnlyTake(t *testing.T) {
-	rapid.Check(t, func(t *rapid.T) {
+	chance.Check(t, func(t *rapid.T) {
 		c := anyCascade(t)
 		ideal, err := c.NoLoadWithStrays()
 		if err != nil {

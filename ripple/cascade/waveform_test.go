@@ -7,6 +7,7 @@ import (
 
 	"pgregory.net/rapid"
 
+	"kilovet/hv/chance"
 	"kilovet/hv/quantity"
 )
 
@@ -34,7 +35,7 @@ func TestHarmonicsAgainstNumericalIntegral(t *testing.T) {
 
 // Summing the harmonics gives the wave-form back, away from the jumps.
 func TestHarmonicsResynthesise(t *testing.T) {
-	rapid.Check(t, func(t *rapid.T) {
+	chance.Check(t, func(t *rapid.T) {
 		c := anyCascade(t)
 		w := c.climb(anyLoad(t, c)).Ripple
 		const count = 4000

@@ -6,12 +6,13 @@ import (
 
 	"pgregory.net/rapid"
 
+	"kilovet/hv/chance"
 	"kilovet/hv/quantity"
 )
 
 // Whatever a cubic does over a step, the range holds it, and touches it where it grew.
 func TestRangeHoldsTheCubic(t *testing.T) {
-	rapid.Check(t, func(r *rapid.T) {
+	chance.Check(t, func(r *rapid.T) {
 		volts := rapid.Float64Range(-1e4, 1e4)
 		y := samples{volts.Draw(r, "start"), volts.Draw(r, "first"), volts.Draw(r, "second"), volts.Draw(r, "end")}
 		middle, half := volts.Draw(r, "middle"), rapid.Float64Range(0, 3e4).Draw(r, "half")

@@ -5,6 +5,7 @@ import (
 	"math"
 	"testing"
 
+	"kilovet/hv/chance"
 	"kilovet/hv/circuit"
 
 	"pgregory.net/rapid"
@@ -67,7 +68,7 @@ func names(c *circuit.Circuit) []string {
 // Any ladder with any single fault ends in a balanced state or in a lack, after
 // bounded work.
 func TestAnyLadder(t *testing.T) {
-	rapid.Check(t, func(t *rapid.T) { checkAny(t) })
+	chance.Check(t, func(t *rapid.T) { checkAny(t) })
 }
 
 // FuzzAnyLadder is the same under the fuzzer: go test -fuzz FuzzAnyLadder ./ripple/network

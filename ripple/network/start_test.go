@@ -6,6 +6,7 @@ import (
 
 	"pgregory.net/rapid"
 
+	"kilovet/hv/chance"
 	"kilovet/hv/quantity"
 )
 
@@ -99,7 +100,7 @@ func TestLeapsAgainstEveryPeriod(t *testing.T) {
 // With the period that passes after it a leap ends before what is known to lie beyond, whatever
 // the voltages foretell: else it would be taken again and again.
 func TestLeapsEndBeforeWhatLiesBeyond(t *testing.T) {
-	rapid.Check(t, func(t *rapid.T) {
+	chance.Check(t, func(t *rapid.T) {
 		periods := math.Floor(rapid.Float64Range(0, 1e4).Draw(t, "periods"))
 		f := foothold{periods: periods, beyond: periods + math.Floor(rapid.Float64Range(2, 500).Draw(t, "beyond"))}
 		level := rapid.Float64Range(1, 1e5).Draw(t, "level")

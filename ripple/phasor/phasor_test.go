@@ -9,6 +9,7 @@ import (
 	"pgregory.net/rapid"
 
 	"kilovet/hv/chain"
+	"kilovet/hv/chance"
 	"kilovet/hv/circuit"
 	"kilovet/hv/document"
 	"kilovet/hv/lack"
@@ -256,7 +257,7 @@ func whole() *chain.Chain {
 // The response to several drives is the sum of the responses to each.
 func TestSuperposition(t *testing.T) {
 	c := build(whole())
-	rapid.Check(t, func(r *rapid.T) {
+	chance.Check(t, func(r *rapid.T) {
 		f := quantity.Frequency(math.Pow(10, rapid.Float64Range(0, 7).Draw(r, "log f")))
 		volts := rapid.Float64Range(-1000, 1000)
 		a, b := Phasor(complex(volts.Draw(r, "re"), volts.Draw(r, "im"))), Phasor(complex(volts.Draw(r, "re"), volts.Draw(r, "im")))

@@ -8,6 +8,7 @@ import (
 	"github.com/google/go-cmp/cmp"
 	"pgregory.net/rapid"
 
+	"kilovet/hv/chance"
 	"kilovet/hv/document"
 	"kilovet/rules/compare"
 	"kilovet/rules/figure"
@@ -161,7 +162,7 @@ func sides(t *rapid.T, label string) compare.Side {
 }
 
 func TestASideDoesNotDifferFromItself(t *testing.T) {
-	rapid.Check(t, func(t *rapid.T) {
+	chance.Check(t, func(t *rapid.T) {
 		s := sides(t, "side")
 		if d := compare.Of(s, s); !d.Nothing() || d.Worse {
 			t.Errorf("%+v", d)
@@ -172,7 +173,7 @@ func TestASideDoesNotDifferFromItself(t *testing.T) {
 // Seen from the other side the same things have changed, and what got worse one way
 // is not worse the other way.
 func TestTheOtherWayRound(t *testing.T) {
-	rapid.Check(t, func(t *rapid.T) {
+	chance.Check(t, func(t *rapid.T) {
 		old, new := sides(t, "old"), sides(t, "new")
 		there, back := compare.Of(old, new), compare.Of(new, old)
 		if diff := cmp.Diff(sizes(there), sizes(back)); diff != "" {

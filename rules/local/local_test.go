@@ -6,6 +6,7 @@ import (
 
 	"pgregory.net/rapid"
 
+	"kilovet/hv/chance"
 	"kilovet/hv/document"
 	"kilovet/hv/document/faulttest"
 	"kilovet/rules/local"
@@ -254,7 +255,7 @@ func TestWhatIsNeverRelaxed(t *testing.T) {
 
 // No local limit makes a verdict better, and no relaxation makes one meet.
 func TestLocalLimitsNeverHelp(t *testing.T) {
-	rapid.Check(t, func(t *rapid.T) {
+	chance.Check(t, func(t *rapid.T) {
 		amount := func(name string) float64 { return rapid.Float64Range(1e-3, 1).Draw(t, name) }
 		was := []rule.Finding{clearance("lid", amount("provided"), amount("needed")), diode(1e4 * amount("found"))}
 		f, faults := local.Read([]byte(limit("spacing.clearance", rapid.StringMatching(`[1-9][0-9]{0,3} mm`).Draw(t, "least"))+

@@ -7,6 +7,7 @@ import (
 
 	"pgregory.net/rapid"
 
+	"kilovet/hv/chance"
 	"kilovet/rules/rule"
 	"kilovet/rules/signoff"
 )
@@ -56,7 +57,7 @@ func TestSymbolsAreTheBitsInOrder(t *testing.T) {
 // One sign wrong, two neighbours or next but one exchanged, a sign lost or added: always
 // noticed, never read as another code.
 func TestSlipsAreNoticed(t *testing.T) {
-	rapid.Check(t, func(t *rapid.T) {
+	chance.Check(t, func(t *rapid.T) {
 		s := subject()
 		s.Program = rapid.String().Draw(t, "program")
 		code := strings.ReplaceAll(s.Code(), "-", "")

@@ -10,6 +10,7 @@ import (
 	"pgregory.net/rapid"
 
 	"kilovet/hv/chain"
+	"kilovet/hv/chance"
 	"kilovet/rules/rule"
 	"kilovet/rules/spacing"
 )
@@ -73,7 +74,7 @@ func served(t *testing.T, fatalf func(string, ...any), text, sizeKey string) (si
 // One size that a remedy of clearance or breakdown names serves both rules, in oil, vacuum
 // and solids, where the working stress asks for the distance; where none does, that is said.
 func TestOneSizeServesBothRules(t *testing.T) {
-	rapid.Check(t, func(rt *rapid.T) {
+	chance.Check(t, func(rt *rapid.T) {
 		text, sizeKey := shapedGap(
 			rapid.SampledFrom([]string{"oil", "vacuum", "solid"}).Draw(rt, "medium"),
 			rapid.SampledFrom([]string{"rounded edge", "sphere-plane", "cylinder-plane"}).Draw(rt, "shape"),

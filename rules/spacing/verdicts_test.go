@@ -9,6 +9,7 @@ import (
 	"pgregory.net/rapid"
 
 	"kilovet/hv/chain"
+	"kilovet/hv/chance"
 	"kilovet/rules/evidence"
 	"kilovet/rules/rule"
 	"kilovet/rules/spacing"
@@ -82,7 +83,7 @@ func draw(t *rapid.T) drawn {
 // A longer way, a lower place, a cleaner and rounder electrode, a better material, polish
 // and conditioning never make a verdict of a spacing worse.
 func TestNothingBetterIsJudgedWorse(t *testing.T) {
-	rapid.Check(t, func(rt *rapid.T) {
+	chance.Check(t, func(rt *rapid.T) {
 		d := draw(rt)
 		base := findings(t, d.text())
 		better := map[string]func(drawn) drawn{

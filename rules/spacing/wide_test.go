@@ -9,6 +9,7 @@ import (
 
 	"pgregory.net/rapid"
 
+	"kilovet/hv/chance"
 	"kilovet/rules/rule"
 )
 
@@ -125,7 +126,7 @@ func TestNothingBetterIsJudgedWorseAnywhere(t *testing.T) {
 		"both":     func(d anyGap) anyGap { d.finish, d.conditioned = "polished", true; return d },
 	}
 	names := []string{"clearance", "creepage", "altitude", "radius", "surface", "material", "finish", "both", "voltage", "class", "polarity", "symmetry", "test"}
-	rapid.Check(t, func(rt *rapid.T) {
+	chance.Check(t, func(rt *rapid.T) {
 		d := drawAny(rt)
 		what := rapid.SampledFrom(names).Draw(rt, "better")
 		base, after := findings(t, d.text()), findings(t, better[what](d).text())

@@ -85,23 +85,21 @@ func (e *Evidence) turn(k knob, start float64) Remedy {
 		b = -b
 	}
 	bound := math.Copysign(math.Log(turnedBy), b)
+	var last *Evidence
 	for range solutions {
 		x := e.Changed(k.change(math.Exp(b)))
 		used, err := x.use()
 		if err != nil {
-			if r.Becomes == 0 { // else it cannot be carried further than before
+			if last == nil { // else it cannot be carried further than before
 				r.Unknown = err
 			}
-			return r
+			break
 		}
 		ub := math.Log(used)
-		r = x.effects(r, k.now*math.Exp(b))
-		if r.Reached = math.Abs(ub) < nearness; r.Reached {
-			return r
-		}
+		last, r.Becomes, r.Reached = x, k.now*math.Exp(b), math.Abs(ub) < nearness
 		beyond := (ub < 0) == r.Relaxed // it would have to go further still
-		if beyond && quantity.Equal(b, bound) {
-			return r
+		if r.Reached || beyond && quantity.Equal(b, bound) {
+			break
 		}
 		next := bound
 		if math.Abs(ub-ua) > feeble*math.Abs(b-a) {
@@ -111,6 +109,9 @@ func (e *Evidence) turn(k knob, start float64) Remedy {
 			next = bound * furthest
 		}
 		a, ua, b = b, ub, next
+	}
+	if last != nil {
+		last.effects(&r)
 	}
 	return r
 }
@@ -139,8 +140,7 @@ func (k knob) change(factor float64) Change {
 }
 
 // effects notes what the changed chain is.
-func (e *Evidence) effects(r Remedy, becomes float64) Remedy {
-	r.Becomes = becomes
+func (e *Evidence) effects(r *Remedy) {
 	set := func(err error) {
 		if err != nil && r.Unknown == nil {
 			r.Unknown = err
@@ -162,7 +162,6 @@ func (e *Evidence) effects(r Remedy, becomes float64) Remedy {
 	set(err)
 	r.Input, err = e.InputPower()
 	set(err)
-	return r
 }
 
 // drive is the peak that holds the set voltage, in an open loop that of the drive.

@@ -124,8 +124,9 @@ func (p *Periodic) flow(list []branch) (f Flow, impulse bool) {
 
 // peak raises a peak to the largest magnitude over a step. Where a diode has just
 // switched the start may be passed over: the stages then ring about the current that
-// follows, of which the end of the step and the next step tell. Between the two the
-// magnitude passes from one to the other, so that a slight change makes a slight one.
+// follows, of which the end of the step and the next step tell. From a start a fiftieth
+// beside that current to one two fiftieths beside it, what counts passes from the turn within
+// the step to the end of the step, so that a slight change makes a slight one.
 func (y *samples) peak(euler bool, most float64) float64 {
 	most = math.Max(most, math.Abs(y[3]))
 	if euler {
@@ -142,9 +143,12 @@ func (y *samples) peak(euler bool, most float64) float64 {
 		return most
 	}
 	b := parabola(y[1], y[2], y[3])
-	smooth := math.Min(1, 2-math.Abs(y[0]-b[0])/(0.02*math.Abs(b[0])))
-	if !(smooth > 0) {
+	beside, borne, smooth := math.Abs(y[0]-b[0]), 0.02*math.Abs(b[0]), 1.0
+	if !(beside < 2*borne || beside == 0) {
 		return most
+	}
+	if beside > borne {
+		smooth = 2 - beside/borne
 	}
 	end := math.Abs(y[3])
 	for _, x := range p.turns() {

@@ -200,7 +200,7 @@ func TestDrawsAreTheSameEachTime(t *testing.T) {
 		}
 		ast.Inspect(s.file, func(n ast.Node) bool {
 			if call, ok := n.(*ast.SelectorExpr); ok {
-				if x, ok := call.X.(*ast.Ident); ok && x.Name == "rapid" && call.Sel.Name == "Check" {
+				if x, ok := call.X.(*ast.Ident); ok && x.Name == "rapid" && (call.Sel.Name == "Check" || call.Sel.Name == "MakeCheck") {
 					t.Errorf("%s draws other cases each time: chance.Check does not", s.set.Position(n.Pos()))
 				}
 			}

@@ -99,3 +99,49 @@ func TestWhatIsNotFollowed(t *testing.T) {
 		}
 	}
 }
+
+// Leakage alone holds the middle of column b, a millionth of the load: no haste is made from such a
+// state, and another is found to its uncertainty. In haste it stood 29 V beside it.
+const hangingColumns = `format = 1
+[drive]
+waveform = "sine"
+frequency = "9.372 Hz"
+peak = "10 kV"
+resistance = "0 ohm"
+inductance = "1 kH"
+[multiplier]
+topology = "symmetrical"
+polarity = "negative"
+stages = 1
+coupling_capacitor = { value = "8.608 nF" }
+smoothing_capacitor = { value = "8.608 nF" }
+diode = { forward_drop = "6.233 V", resistance = "1.2395 Mohm", capacitance = "293.9 pF", leakage = "0.0807 pA", rated_voltage = "30 kV" }
+pickup_to_output = "0 F"
+[[load]]
+name = "load"
+at = "multiplier"
+current = "25.4 nA"
+`
+
+func TestNoHasteWhereLeakageAloneHoldsAColumn(t *testing.T) {
+	whole := steady(t, build(t, hangingColumns))
+	more, n := []float64{0.958, 1, 1.08, 0.988, 1.046, 0.905, 0.949, 0.92, 1.012, 1.1, 0.919, 1.014}, 0
+	uneven := whole.Circuit.Each(func(e *circuit.Element) bool {
+		e.Capacitance *= quantity.Capacitance(more[n])
+		e.Resistance *= quantity.Resistance(more[n])
+		e.Current *= quantity.Current(more[n])
+		n++
+		return true
+	})
+	exact := steady(t, uneven)
+	swift, err := Steady(uneven, Options{From: whole, Swift: true})
+	if err != nil {
+		t.Fatal(err)
+	}
+	b, _ := uneven.Node("coupling.b.1")
+	x, _ := exact.At(b)
+	y, _ := swift.At(b)
+	if off := math.Abs(float64(x.Mean - y.Mean)); !(off <= float64(exact.Uncertainty+swift.Uncertainty)) {
+		t.Errorf("%v, exact %v, to %v and %v", y.Mean, x.Mean, swift.Uncertainty, exact.Uncertainty)
+	}
+}

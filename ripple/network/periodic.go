@@ -25,6 +25,8 @@ type Periodic struct {
 	swings swings
 	peaks  []float64 // potentials at the peaks of the guess, no diode pressed
 	trust  float64   // what the mean changed by over what it was to, where it was held; else zero
+	// amplified is by how much more than what a period changes a correction was, at most.
+	amplified float64
 }
 
 // periodic takes the state out of the shooter.

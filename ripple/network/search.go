@@ -159,7 +159,7 @@ func (s *search) improve(g grade, size float64, done func() bool) (finished bool
 		return false, err
 	}
 	near := math.Abs(f-1) <= s.tolerated(g)
-	if near && g == fine && s.swift && norm(s.step) <= s.slight*norm(s.x) && s.carryThrough() {
+	if near && g == fine && s.swift && norm(s.step) <= s.slight*norm(s.x) && s.closing(size) && s.carryThrough() {
 		return true, nil
 	}
 	if near && done() {
@@ -185,6 +185,10 @@ const slight = 1e-5
 
 // faint is the part by which such a correction may change steps and pulses of current.
 const faint = 0.01
+
+// closing reports whether corrections are known to lead to the state: Newton's method never went
+// astray, and what a period changes fell to a tenth with the last one, if there was one.
+func (s *search) closing(size float64) bool { return s.leaps == 0 && size <= 0.1*s.last }
 
 // carryThrough carries the correction in hand through the period walked last, to the end of the
 // search. It reports whether the currents change so faintly, and so little charge is misplaced,

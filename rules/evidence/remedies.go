@@ -154,10 +154,9 @@ func (e *Evidence) effects(r *Remedy) {
 	out, err := e.Potential("output")
 	set(err)
 	r.Drop = magnitude(top) - magnitude(out)
-	if r.DriveNeeded, err = e.drive(); err != nil {
-		set(err)
-	}
-	r.Held = quantity.AtMost(float64(r.DriveNeeded), float64(e.chain.Drive.Peak.V))
+	r.DriveNeeded, err = e.drive()
+	set(err)
+	r.Held = err == nil && quantity.AtMost(float64(r.DriveNeeded), float64(e.chain.Drive.Peak.V))
 	r.Stored, err = e.StoredEnergy()
 	set(err)
 	r.Input, err = e.InputPower()

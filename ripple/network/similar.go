@@ -4,14 +4,23 @@ import "kilovet/hv/circuit"
 
 // similar is what a search starts from: a state of a similar circuit, and of two others
 // that differ as the circuit at hand does from that one; nil where there are none.
-type similar struct{ state, before, after *Periodic }
+type similar struct {
+	state, before, after *Periodic
+	loose                bool // hardly more than leakage holds the state: no haste is made from it
+}
+
+// loosely is how many times what a period changes a correction may be for a swift search from
+// that state: where hardly more than leakage ties a column down, the charges come back to 1e-5 of
+// what the diodes pass while voltages are hundredths off. With a fault that has to do: what such
+// a column comes to hangs on leakages that nobody knows as well.
+const loosely = 1e5
 
 // similar is nil where there is no state to start from.
 func (o *Options) similar() *similar {
 	if o.From == nil {
 		return nil
 	}
-	return &similar{o.From, o.Before, o.After}
+	return &similar{o.From, o.Before, o.After, !o.walking && o.From.amplified > loosely}
 }
 
 // corrections are the charges by which the guess of a state had to be corrected, by

@@ -123,16 +123,11 @@ func (s *search) solve(from *similar) (*Periodic, error) {
 	return s.atStillest(err)
 }
 
-// loosely is how many times what a period changes a correction may be for a swift search from
-// that state: where hardly more than leakage ties a column down, the charges come back to 1e-5 of
-// what the diodes pass while voltages are hundredths off.
-const loosely = 1e5
-
 // search searches from the state of a similar circuit where there is one, as long as
 // Newton's method gets there by itself, and then in one way after the other.
 func (s *search) search(from *similar) (*Periodic, error) {
 	if from != nil {
-		s.swift = s.swift && from.state.amplified <= loosely
+		s.swift = s.swift && !from.loose
 		if s.swift {
 			if p, err := s.pass(from); err == nil {
 				return p, nil

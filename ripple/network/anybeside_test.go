@@ -15,8 +15,8 @@ import (
 
 // Any loaded ladder found swiftly from the state of one whose values are up to a tenth other,
 // the last slight correction carried through the period, is the same as where the period is
-// walked again, or as the state found with no haste (of which the peaks are better where a diode
-// switched in next to no time): potentials to a part in fifty thousand of the largest, means of
+// walked again or, where those two differ, as the state found with no haste, which is the truth
+// of the three: potentials to a part in fifty thousand of the largest, means of
 // the diodes' currents to a thousandth of the largest and what the part in a million to which a
 // swift state is known would carry, peaks to a hundredth of their own and, for what hardly
 // conducts, a ten-thousandth of the largest.
@@ -26,13 +26,7 @@ func TestAnyCarriedThroughIsAsWalkedOn(t *testing.T) {
 		if err != nil {
 			return
 		}
-		other := whole.Circuit.Each(func(e *circuit.Element) bool {
-			f := rapid.Float64Range(0.9, 1.1).Draw(t, e.Name)
-			e.Capacitance *= quantity.Capacitance(f)
-			e.Resistance *= quantity.Resistance(f)
-			e.Current *= quantity.Current(f)
-			return true
-		})
+		other := times(whole.Circuit, func(_ int, name string) float64 { return rapid.Float64Range(0.9, 1.1).Draw(t, name) })
 		carried, err := foundSwiftly(t, other, whole, slight)
 		walked, err2 := foundSwiftly(t, other, whole, 0)
 		if err2 != nil {
@@ -49,6 +43,19 @@ func TestAnyCarriedThroughIsAsWalkedOn(t *testing.T) {
 		if err != nil || len(carried.beside(exact)) > 0 {
 			t.Errorf("%s", strings.Join(beside, "\n"))
 		}
+	})
+}
+
+// times is a circuit whose elements have so many times their values; they are counted from zero.
+func times(c *circuit.Circuit, factor func(n int, name string) float64) *circuit.Circuit {
+	n := 0
+	return c.Each(func(e *circuit.Element) bool {
+		f := factor(n, e.Name)
+		n++
+		e.Capacitance *= quantity.Capacitance(f)
+		e.Resistance *= quantity.Resistance(f)
+		e.Current *= quantity.Current(f)
+		return true
 	})
 }
 

@@ -81,17 +81,23 @@ type pulse struct {
 	peak, then   float64 // before the change, and after it
 }
 
-// faint reports whether the change makes no more than a part of the diodes' currents: of the
-// largest charge, and of each peak, or of the largest a hundredth of that.
+// faint reports whether the change makes little of the diodes' currents.
 func (f *followed) faint(part float64) bool {
 	f.pulses = f.pulses[:0]
-	charge, peak := 0.0, 0.0
 	for i := range f.diodes {
-		p := f.pulse(i)
-		f.pulses = append(f.pulses, p)
+		f.pulses = append(f.pulses, f.pulse(i))
+	}
+	return faintly(f.pulses, part)
+}
+
+// faintly reports whether pulses change by no more than a part: of the largest charge, and of each
+// peak, or of the largest a hundredth of that.
+func faintly(pulses []pulse, part float64) bool {
+	charge, peak := 0.0, 0.0
+	for _, p := range pulses {
 		charge, peak = math.Max(charge, p.charge), math.Max(peak, p.peak)
 	}
-	for _, p := range f.pulses {
+	for _, p := range pulses {
 		if !(math.Abs(p.more) <= part*charge && math.Abs(p.then-p.peak) <= part*math.Max(p.peak, 0.01*peak)) {
 			return false
 		}

@@ -46,17 +46,9 @@ func searched(t *testing.T, text string) *search {
 // through, walked, and as it was.
 func (s *search) changed(t *testing.T, part float64) (carried, walked, unchanged *Periodic) {
 	x := append([]float64(nil), s.x...)
-	walk := func() *Periodic {
-		s.pace.bounds, s.pace.smooth, s.pace.track = fine.bounds(), true, (&track{system: s.system}).reserve()
-		if err := s.walk(); err != nil {
-			t.Fatal(err)
-		}
-		return &Periodic{Circuit: s.c, track: s.pace.track}
-	}
+	walk := func() *Periodic { return &Periodic{Circuit: s.c, track: s.walkedAnew(t)} }
 	unchanged, carried = walk(), walk()
-	copy(s.step, x)
-	scaleBy(s.step, part)
-	s.unpack(s.step, s.root, s.dq, s.di)
+	s.enlarge(part)
 	if !carried.track.follow(s.dq, s.di, s.lanes, bearing{math.Inf(1), 0.1}) {
 		t.Fatal("not followed")
 	}
@@ -64,6 +56,22 @@ func (s *search) changed(t *testing.T, part float64) (carried, walked, unchanged
 	walked = walk()
 	copy(s.x, x)
 	return carried, walked, unchanged
+}
+
+// walkedAnew is the period from the state found, finely walked.
+func (s *search) walkedAnew(t *testing.T) *track {
+	s.pace.bounds, s.pace.smooth, s.pace.track = fine.bounds(), true, (&track{system: s.system}).reserve()
+	if err := s.walk(); err != nil {
+		t.Fatal(err)
+	}
+	return s.pace.track
+}
+
+// enlarge makes the step in hand a part of the state, and what that is of charges and currents.
+func (s *search) enlarge(part float64) {
+	copy(s.step, s.x)
+	scaleBy(s.step, part)
+	s.unpack(s.step, s.root, s.dq, s.di)
 }
 
 // switchedApart is the largest difference of the instants at which two periods switch, in periods.

@@ -25,7 +25,8 @@ type Options struct {
 	// come back to 1e-5 of what the diodes pass, for figures that are compared with limits
 	// and ratings; else it is 1e-9 and 1e-8. A slight correction is carried through the period
 	// where no switching misplaces more charge than that. Where From is near the rough mesh is
-	// left out, and the uncertainty is that of the state started from.
+	// left out, and the uncertainty is that of the state started from. No haste is made where
+	// hardly more than leakage holds that state.
 	Swift bool
 
 	creeping bool // creep first: Newton's method is known to go astray

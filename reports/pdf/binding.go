@@ -7,8 +7,6 @@ import (
 	"slices"
 	"time"
 
-	"codeberg.org/go-fonts/dejavu/dejavusans"
-	"codeberg.org/go-fonts/dejavu/dejavusansbold"
 	"github.com/jung-kurt/gofpdf"
 
 	"kilovet/reports/page"
@@ -26,16 +24,17 @@ type binding struct {
 // the clock; the sheets hold none, their date of issue is an input.
 var undated = time.Date(2000, time.January, 1, 0, 0, 0, 0, time.UTC)
 
-// newBinding is a file without sheets. The library writes into the fonts it is given.
-func newBinding(p Paper) (*binding, error) {
+// newBinding is a file without sheets, set in the two cuts of the type. The library writes
+// into what it is given.
+func newBinding(p Paper, regular, bold []byte) (*binding, error) {
 	width, height := p.size()
 	b := &binding{Fpdf: gofpdf.NewCustom(&gofpdf.InitType{OrientationStr: "P", UnitStr: "mm", Size: gofpdf.SizeType{Wd: width, Ht: height}}), links: map[string]int{}}
 	b.SetCompression(false) // see streams.go
 	b.SetCatalogSort(true)
 	b.SetModificationDate(undated)
 	b.SetAutoPageBreak(false, 0)
-	b.AddUTF8FontFromBytes(family, "", bytes.Clone(dejavusans.TTF))
-	b.AddUTF8FontFromBytes(family, "B", bytes.Clone(dejavusansbold.TTF))
+	b.AddUTF8FontFromBytes(family, "", regular)
+	b.AddUTF8FontFromBytes(family, "B", bold)
 	return b, b.name()
 }
 
@@ -86,14 +85,20 @@ func (b *binding) bound(w *flow, block page.TitleBlock, painted []*painter) ([]b
 // embed has the library keep the glyphs of all runes: it keeps those of what it writes.
 func (b *binding) embed(painted []*painter) {
 	for c, cut := range [2]string{"", "B"} {
-		var all runes
-		for _, p := range painted {
-			all.join(&p.runes[c])
-		}
+		all := runesOf(painted, face(c))
 		b.SetFont(family, cut, 1)
 		b.Text(0, 0, string(all.list()))
 	}
 	b.SetFont(family, "", 1) // in whose code the outline is written
+}
+
+// runesOf are those that the sheets need of a cut.
+func runesOf(painted []*painter, c face) *runes {
+	var all runes
+	for _, p := range painted {
+		all.join(&p.runes[c])
+	}
+	return &all
 }
 
 // announce gives every anchor that is led to a number in the file.

@@ -25,6 +25,9 @@ const (
 	bold
 )
 
+// cuts are the cuts of the type.
+var cuts = [2][]byte{dejavusans.TTF, dejavusansbold.TTF}
+
 // points is millimetres per point.
 const points = 25.4 / 72
 
@@ -41,7 +44,7 @@ type fonts struct {
 
 func newFonts() (*fonts, error) {
 	f := &fonts{widths: [2]map[rune]float64{{}, {}}, wrapped: map[wanted][]set{}}
-	for i, data := range [2][]byte{dejavusans.TTF, dejavusansbold.TTF} {
+	for i, data := range cuts {
 		parsed, err := sfnt.Parse(data)
 		if err != nil {
 			return nil, fmt.Errorf("pdf: font: %w", err)

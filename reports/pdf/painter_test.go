@@ -1,6 +1,7 @@
 package pdf
 
 import (
+	"bytes"
 	"math"
 	"regexp"
 	"slices"
@@ -14,7 +15,7 @@ import (
 // end a string, and signs of two bytes that hold such marks.
 func TestTextIsThatOfTheLibrary(t *testing.T) {
 	texts := []string{"20 kV (peak)", "a\\b", "a\rb", "1 µA at 20 kV", "\u5c28\u2829\u0d5c", "", "20 kV (peak)"}
-	binding, err := newBinding(A4)
+	binding, err := newBinding(A4, bytes.Clone(cuts[regular]), bytes.Clone(cuts[bold]))
 	if err != nil {
 		t.Fatal(err)
 	}

@@ -1,6 +1,7 @@
 package pdf
 
 import (
+	"bytes"
 	"errors"
 	"fmt"
 
@@ -40,7 +41,9 @@ func (p *Press) setUp() {
 	p.fonts, errs[0] = newFonts()
 	p.pen, errs[1] = drawing.NewPen()
 	p.beside, errs[2] = drawing.NewPen()
-	p.binding, errs[3] = newBinding(p.paper)
+	if errs[0] == nil {
+		p.binding, errs[3] = newBinding(p.paper, p.fonts.common(regular), p.fonts.common(bold))
+	}
 	p.err = errors.Join(errs[:]...)
 }
 
@@ -66,6 +69,9 @@ func (p *Press) laidOut(curves *ahead, d *page.Document) (w *flow) {
 // printed is the file with the sheets of a layout in it.
 func (p *Press) printed(w *flow, block page.TitleBlock) (file []byte, err error) {
 	painted, err := p.painted(w)
+	if err == nil && !(runesOf(painted, regular).commons() && runesOf(painted, bold).commons()) {
+		painted, err = p.paintedAnew(w)
+	}
 	if err != nil {
 		return nil, err
 	}
@@ -82,6 +88,14 @@ func (p *Press) printed(w *flow, block page.TitleBlock) (file []byte, err error)
 		return nil, err
 	}
 	return withoutMoment(withoutMoment(file, "CreationDate", issued(block)), "ModDate", undated), nil
+}
+
+// paintedAnew is painted, with the whole type, whose cuts have other names.
+func (p *Press) paintedAnew(w *flow) (painted []*painter, err error) {
+	if p.binding, err = newBinding(p.paper, bytes.Clone(cuts[regular]), bytes.Clone(cuts[bold])); err != nil {
+		return nil, err
+	}
+	return p.painted(w)
 }
 
 // painted is what is seen on the sheets.

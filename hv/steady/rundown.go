@@ -36,6 +36,7 @@ type rundown struct {
 	most    float64 // largest capacitor voltage
 	next    float64 // the same at the end of the step tried
 	first   float64 // s: length of the first step
+	before  float64 // s: length of the step whose changes are at hand; zero after one that was refused
 	diode   float64 // ohm, common to all diodes that conduct; zero for ideal ones
 	gOn     float64 // of a conducting diode
 	lost    bool    // the diodes did not settle

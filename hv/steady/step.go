@@ -47,10 +47,11 @@ func (r *rundown) run(p pace, see func(t float64)) error {
 	r.jump()
 	see(0)
 	for t, h, longer := 0.0, r.first, float64(growth); t < horizon && r.most > p.done; {
+		h = r.untilSwitching(h)
 		strain := r.step(h, p)
 		if strain > 1 && h > shortest*r.first {
 			h *= math.Max(0.2, 0.8/math.Cbrt(strain))
-			longer = 1 // what refused this step refuses the next long one as well
+			longer, r.before = 1, 0 // what refused this step refuses the next long one as well
 			continue
 		}
 		t += h
@@ -156,7 +157,7 @@ func (r *rundown) begin(stage int) {
 // accept makes the end of the step tried the present.
 func (r *rundown) accept(h float64) {
 	r.work.Steps++
-	r.most = r.next
+	r.most, r.before = r.next, h
 	r.arrive(h)
 }
 

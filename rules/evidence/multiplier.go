@@ -73,11 +73,16 @@ func (e *Evidence) Drop() (Drop, error) {
 }
 
 func (e *Evidence) split(d *Drop, mean quantity.Voltage) error {
-	withStrays, err := e.topBehind("a stiff drive", stiffDrive)
+	c, err := e.Circuit()
 	if err != nil {
 		return err
 	}
-	ideal, err := e.topBehind("a stiff drive, no strays", func(c *circuit.Circuit) *circuit.Circuit { return strayless(stiffDrive(c)) })
+	stiff := stiffDrive(c)
+	withStrays, err := e.topOf(stiff)
+	if err != nil {
+		return err
+	}
+	ideal, err := e.topOf(strayless(stiff))
 	if err != nil {
 		return err
 	}
@@ -90,31 +95,13 @@ func (e *Evidence) split(d *Drop, mean quantity.Voltage) error {
 	return nil
 }
 
-// topBehind is how the top of the multiplier moves once its circuit is edited.
-func (e *Evidence) topBehind(name string, edit func(*circuit.Circuit) *circuit.Circuit) (network.Swing, error) {
-	p, err := e.edited(name, edit)
+// topOf is how the top of an edited circuit moves.
+func (e *Evidence) topOf(c *circuit.Circuit) (network.Swing, error) {
+	p, err := e.solve(c, beside{}, true)
 	if err != nil {
 		return network.Swing{}, err
 	}
 	return p.between("multiplier", "ground")
-}
-
-// edited is the state of the circuit once it is edited, found from that of the working chain.
-func (e *Evidence) edited(name string, edit func(*circuit.Circuit) *circuit.Circuit) (periodic, error) {
-	return remember(e, name, func() (periodic, error) {
-		c, err := e.Circuit()
-		if err != nil {
-			return periodic{}, err
-		}
-		var near beside
-		working := Condition{State: Working}
-		if e.before == nil && e.condition.key() != working.key() {
-			if p, err := e.Under(working).edited(name, edit); err == nil {
-				near.from = p.Periodic
-			}
-		}
-		return e.solve(edit(c), near, true)
-	})
 }
 
 // stiffDrive takes away what stands in series with the drive and in the diodes.

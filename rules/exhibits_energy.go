@@ -30,7 +30,7 @@ func nodeEnergy(e *evidence.Evidence) []exhibit.Table {
 		ID: "energy.nodes", Chapter: exhibit.Energy, Title: "What each node holds, and for how long", Basis: evidence.Basis,
 		Columns: []exhibit.Column{{Head: "node"}, {Head: "voltage", Unit: "V"}, {Head: "charge", Unit: "C"}, {Head: "energy", Unit: "J"},
 			{Head: "current through 2 kΩ", Unit: "A"}, {Head: "to 60 V", Unit: "s"}, {Head: "to 60 V, drive unplugged", Unit: "s"}},
-		Note: under(e) + "Charge and energy are what an ideal short delivers, drive and loads off; the times count what is permanent alone. A meter at the divider shows the sensed node only. The mains is that of its live conductor, peak: only its plug ends it.",
+		Note: under(e) + "Charge and energy are what an ideal short delivers, drive and loads off; the times count what is permanent alone; with the drive unplugged a node that only diodes lead to falls when one of them conducts, which hangs on little. A meter at the divider shows the sensed node only. The mains is that of its live conductor, peak: only its plug ends it.",
 	}
 	t.Rows = byNode(e.Nodes(), func(node string) []exhibit.Cell { return held(e, node) })
 	return table(t)
@@ -165,7 +165,7 @@ func rodTable(e *evidence.Evidence) []exhibit.Table {
 	t := exhibit.Table{
 		ID: "energy.rod", Chapter: exhibit.Energy, Title: "The earthing rod at each node", Basis: "decay of the whole network with the rod on one node",
 		Columns: []exhibit.Column{{Head: "node"}, {Head: "voltage", Unit: "V"}, {Head: "peak current", Unit: "A"}, {Head: "node to 60 V", Unit: "s"}, {Head: "all to 60 V", Unit: "s"}, {Head: "energy", Unit: "J"}},
-		Note:    under(e) + "All to 60 V is the time after which no node comes back when the rod is lifted, absorption apart. Touch every node in turn, from the earthy end to the hot end, then clip each; leave the earth on. Never the mains: it is unplugged.",
+		Note:    under(e) + "All to 60 V is the time after which no node comes back when the rod is lifted, absorption apart; to a tenth where charge runs off through diodes, for which of them conduct hangs on little. Touch every node in turn, from the earthy end to the hot end, then clip each; leave the earth on. Never the mains: it is unplugged.",
 	}
 	t.Rows = byNode(e.Discharged(), func(node string) []exhibit.Cell { // a rod ends no mains
 		r, err := e.Reachable(node)

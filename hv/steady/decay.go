@@ -23,8 +23,10 @@ type Decay struct {
 // switched off, heater and gun cold: of resistors only the permanent ones count, all
 // capacitors do, diodes conduct forward without drop and block otherwise, leakage
 // never counts, sources and inductors are connections, gaps are open. It ends when
-// nothing moves any more; times are good to a part in a thousand, to a hundredth where it
-// hangs on little which of two diodes conducts first.
+// nothing moves any more. Times are good to a part in a thousand. Where a ladder runs off
+// through its diodes, a rod on a node within it or its drive unplugged, which of them conduct
+// hangs on little: the last node's time is good to a tenth there, and a node that nothing but
+// diodes leads to may fall at once at a time that is not known.
 //
 // Errors: a lack for a doubted capacitance or a resistor without a value.
 func Discharge(c *circuit.Circuit, from Voltages, limit quantity.Voltage) (*Decay, error) {
